@@ -1,0 +1,48 @@
+/// <reference types="vitest/config" />
+import { defineConfig } from 'vite'
+import react from '@vitejs/plugin-react'
+import tailwindcss from '@tailwindcss/vite'
+
+const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
+const withPostgres = { globalSetup: ['tests/support/postgres.ts'], pool: 'forks' as const }
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: 'dist/client', manifest: true },
+  test: {
+    projects: [
+      {
+        extends: true,
+        test: {
+          name: 'pure',
+          environment: 'node',
+          include: files('domain', 'published-values', 'contracts', 'architecture', 'pdf'),
+          testTimeout: 60_000,
+        },
+      },
+      { extends: true, test: { name: 'client', environment: 'happy-dom', include: files('client') } },
+      {
+        extends: true,
+        test: {
+          name: 'postgres',
+          environment: 'node',
+          include: files('database', 'api'),
+          ...withPostgres,
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'browser',
+          environment: 'node',
+          include: files('browser'),
+          ...withPostgres,
+          testTimeout: 60_000,
+          hookTimeout: 120_000,
+        },
+      },
+    ],
+  },
+})
