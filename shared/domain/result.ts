@@ -2,7 +2,8 @@
  * The answer of a domain function: a value, or a refusal that says why the question has no answer.
  * Refusals are returned, never thrown; a thrown error is a bug.
  */
-export type Result<T, Code extends string = string> = { ok: true; value: T } | { ok: false; refusal: Refusal<Code> }
+export type Result<T, Code extends string = string> =
+  { ok: true; value: T } | { ok: false; refusal: Refusal<Code> }
 
 /**
  * Why a question has no answer. The sentence is made from `code` and `params` by the message catalogue,
@@ -26,5 +27,8 @@ export function refuse<Code extends string>(
   field?: string,
   params?: Record<string, string | number>,
 ): { ok: false; refusal: Refusal<Code> } {
-  return { ok: false, refusal: { code, ...(field === undefined ? {} : { field }), ...(params ? { params } : {}) } }
+  return {
+    ok: false,
+    refusal: { code, ...(field === undefined ? {} : { field }), ...(params ? { params } : {}) },
+  }
 }

@@ -23,13 +23,28 @@ export function messageLocale(): MessageLocale {
 }
 
 const accented: Record<string, string> = {
-  a: 'á', e: 'é', i: 'í', o: 'ó', u: 'ú', A: 'Á', E: 'É', I: 'Í', O: 'Ó', U: 'Ú', n: 'ñ', c: 'ç', y: 'ý',
+  a: 'á',
+  e: 'é',
+  i: 'í',
+  o: 'ó',
+  u: 'ú',
+  A: 'Á',
+  E: 'É',
+  I: 'Í',
+  O: 'Ó',
+  U: 'Ú',
+  n: 'ñ',
+  c: 'ç',
+  y: 'ý',
 }
 
 /** A sentence as the pseudo-locale shows it: accented, about 40 % longer, in brackets; digits and units untouched. */
 export function pseudo(text: string): string {
   const longer = text.replace(/[a-zA-Z]{3,}/g, (word) =>
-    [...word].map((letter) => accented[letter] ?? letter).join('').replace(/([áéíóú])/, '$1$1'),
+    [...word]
+      .map((letter) => accented[letter] ?? letter)
+      .join('')
+      .replace(/([áéíóú])/, '$1$1'),
   )
   return `[${longer}${'·'.repeat(Math.ceil(text.length * 0.2))}]`
 }

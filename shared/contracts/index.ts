@@ -1,0 +1,14 @@
+import type { Contract } from './contract.ts'
+import * as people from './people.contract.ts'
+import * as signIn from './sign-in.contract.ts'
+
+/** Modules that hold contracts; a new feature adds its own here. */
+const modules = [signIn, people]
+
+const isContract = (value: unknown): value is Contract =>
+  typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'reply' in value
+
+/** Every contract there is: the API documents and the walking tests start here. */
+export const allContracts: readonly Contract[] = modules.flatMap((module) =>
+  Object.values(module as Record<string, unknown>).filter(isContract),
+)

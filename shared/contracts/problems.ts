@@ -1,0 +1,63 @@
+import { z } from 'zod'
+
+/**
+ * Every refusal that can cross the wire (RFC 9457), with its status. The title is in messages/problems.ts under the
+ * same code. `401` not signed in · `403` may not · `404` absent or hidden · `409` state or version · `422` content ·
+ * `429` slow down · `503` busy, try again.
+ */
+export const problemStatus = {
+  'malformed-json': 400,
+  'bad-input': 422,
+  'not-found': 404,
+  'unknown-route': 404,
+  'not-signed-in': 401,
+  'sign-in-failed': 401,
+  'sign-in-locked': 429,
+  'password-change-required': 403,
+  'password-wrong': 403,
+  'password-too-weak': 422,
+  'may-not': 403,
+  'foreign-origin': 403,
+  'too-many-requests': 429,
+  'stale-version': 409,
+  'id-already-used': 409,
+  'idempotency-key-missing': 422,
+  'idempotency-key-reused': 409,
+  'number-already-used': 409,
+  'email-already-used': 409,
+  'last-administrator': 409,
+  'period-reversed': 422,
+  'in-the-future': 422,
+  busy: 503,
+  'file-missing': 422,
+  'file-too-large': 422,
+  'file-type-not-allowed': 422,
+  'broken-record': 409,
+  'already-confirmed': 409,
+  'another-person-needed': 403,
+  'licence-not-valid': 403,
+  'outside-working-order': 500,
+} as const satisfies Record<string, number>
+
+export type ProblemCode = keyof typeof problemStatus
+
+/** One field that has to change. */
+export const FieldProblem = z.object({
+  pointer: z.string().describe('JSON pointer into the body, or /params/… or /query/…'),
+  detail: z.string().describe('What to do about it, in plain words'),
+  code: z.string().optional().describe('Stable code of the refusal, where an engine refused'),
+})
+export type FieldProblem = z.infer<typeof FieldProblem>
+
+/** The wire form of every refusal, `application/problem+json`. */
+export const ProblemBody = z.looseObject({
+  type: z.string().describe('Relative address that names the kind of problem'),
+  title: z.string().describe('The kind of problem in words'),
+  status: z.int().describe('The HTTP status, repeated'),
+  code: z.string().describe('Stable code of the problem'),
+  detail: z.string().optional().describe('What happened this time and the next step'),
+  instance: z.string().optional().describe('The address that was called'),
+  request_id: z.string().describe('Give this to whoever looks after the installation'),
+  errors: z.array(FieldProblem).optional().describe('Every field at fault, not only the first'),
+})
+export type ProblemBody = z.infer<typeof ProblemBody>
