@@ -1,0 +1,4 @@
+import { Foundation1764600000001 } from './0001-foundation.ts'
+
+/** Every migration in order. One that has landed is never edited: add another. */
+export const migrations = [Foundation1764600000001]

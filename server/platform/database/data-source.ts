@@ -1,0 +1,35 @@
+import type pg from 'pg'
+import { DataSource } from 'typeorm'
+import type { EntitySchema } from 'typeorm'
+import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
+
+export type EntityClass = (new () => object) | EntitySchema
+
+/** Connects as the runtime role. Refuses a role that could get round the ledgers. */
+export async function connectRuntime(url: string, entities: readonly EntityClass[], poolSize = 10): Promise<DataSource> {
+  const dataSource = new DataSource({
+    type: 'postgres',
+    url,
+    entities: [...entities],
+    synchronize: false,
+    installExtensions: false,
+    poolSize,
+    extra: { options: '-c timezone=UTC' },
+  })
+  await dataSource.initialize()
+  const [role]: Record<string, boolean>[] = await dataSource.query(
+    `SELECT r.rolsuper, r.rolcreatedb, r.rolcreaterole, r.rolreplication, r.rolbypassrls
+       FROM pg_roles r WHERE r.rolname = current_user`,
+  )
+  const rights = Object.entries(role ?? {}).filter(([, held]) => held)
+  if (rights.length > 0) {
+    await dataSource.destroy()
+    throw new Error(`The runtime role must not have ${rights.map(([right]) => right).join(', ')}.`)
+  }
+  return dataSource
+}
+
+/** The connection pool of a data source, shared with the session store. */
+export function poolOf(dataSource: DataSource): pg.Pool {
+  return (dataSource.driver as PostgresDriver).master as pg.Pool
+}

@@ -1,0 +1,54 @@
+import type { EntityTarget, ObjectLiteral } from 'typeorm'
+import { Problem } from '../http/problem.ts'
+import type { Tx } from './transactions.ts'
+
+/**
+ * Changes a draft only if it still has the version that was read. TypeORM's own version column does not refuse a
+ * stale save, so no versioned row is saved in any other way.
+ */
+export async function updateVersioned<T extends ObjectLiteral & { id: string; version: number }>(
+  tx: Tx,
+  target: EntityTarget<T>,
+  key: { id: string; version: number },
+  patch: Partial<T>,
+): Promise<void> {
+  const done = await tx.manager
+    .createQueryBuilder()
+    .update(target)
+    .set({ ...patch, version: () => 'version + 1' } as never)
+    .where('id = :id AND version = :version', key)
+    .execute()
+  if (done.affected === 1) return
+  const now = await tx.manager.findOneBy(target, { id: key.id } as never)
+  if (!now) throw new Problem('not-found')
+  throw new Problem('stale-version', {
+    detail: 'What you wrote is kept. Read the newer version, then save again.',
+    extra: { current_version: now.version },
+  })
+}
+
+const comparable = (value: unknown) => JSON.stringify(value instanceof Date ? value.toISOString() : (value ?? null))
+
+/**
+ * Writes a record under its own id, once. The same id with the same content is the same request sent again and
+ * changes nothing; with other content it is refused. Two at the same moment: the primary key stops the second, whose
+ * transaction starts again and then finds the first.
+ *
+ * @param compare the fields that make the content; recording time and the like are left out
+ * @returns whether the record is new
+ */
+export async function insertOnce<T extends ObjectLiteral & { id: string }>(
+  tx: Tx,
+  target: EntityTarget<T>,
+  row: T,
+  compare: readonly (keyof T)[],
+): Promise<{ created: boolean }> {
+  const earlier = await tx.manager.findOneBy(target, { id: row.id } as never)
+  if (!earlier) {
+    await tx.manager.insert(target, row as never)
+    return { created: true }
+  }
+  const same = compare.every((field) => comparable(earlier[field]) === comparable(row[field]))
+  if (!same) throw new Problem('id-already-used')
+  return { created: false }
+}
