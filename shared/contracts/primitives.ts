@@ -22,7 +22,7 @@ export const EnteredQuantity = z
 export type EnteredQuantity = z.infer<typeof EnteredQuantity>
 
 /** Paging, sorting and searching of a list, the same words everywhere. */
-export const listQuery = <S extends readonly [string, ...string[]]>(sorts: S) =>
+export const listQuery = <const S extends readonly [string, ...string[]]>(sorts: S) =>
   z.strictObject({
     q: z.string().trim().max(200).optional().describe('Words to look for'),
     sort: z.enum(sorts).optional().describe('Column to sort by'),

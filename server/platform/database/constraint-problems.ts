@@ -5,6 +5,7 @@ import { Problem } from '../http/problem.ts'
 const byConstraint: Record<string, ProblemCode> = {
   uq_people_email: 'email-already-used',
   ck_licences_period: 'period-reversed',
+  uq_setting_confirmations_version: 'already-confirmed',
 }
 
 /** The problem for a broken constraint; null when none is foreseen, which is a bug and answers 500. */

@@ -1,0 +1,48 @@
+import type { DataSource } from 'typeorm'
+import { createAudit } from './features/audit/index.ts'
+import { createFacility } from './features/facility/index.ts'
+import { createPeople } from './features/people/index.ts'
+import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
+import type { Clock } from './platform/clock.ts'
+import { createTransactions } from './platform/database/transactions.ts'
+import { createIds } from './platform/ids.ts'
+import type { Log } from './platform/log.ts'
+import { createLockout } from './platform/sign-in/lockout.ts'
+
+export interface Outside {
+  dataSource: DataSource
+  clock: Clock
+  log: Log
+  /** This installation shows the practice scenario. */
+  demo: boolean
+}
+
+/** The one place where features are made, in an order in which each asks only those made before it. */
+export function compose(outside: Outside) {
+  const { dataSource, clock } = outside
+  const parts = {
+    ...outside,
+    ids: createIds(clock),
+    transactions: createTransactions({ dataSource, clock }),
+  }
+  const facility = createFacility(parts)
+  const people = createPeople({ ...parts, facility: facility.service })
+  const authenticator = createAuthenticator(people)
+  const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
+  const lockout = createLockout(parts)
+  const audit = createAudit(parts)
+  return {
+    parts,
+    authenticator,
+    facility,
+    people,
+    routes: [
+      ...signInRoutes({ authenticator, lockout, people, readMe }),
+      ...people.routes,
+      ...facility.routes,
+      ...audit.routes,
+    ],
+  }
+}
+
+export type Composition = ReturnType<typeof compose>

@@ -1,0 +1,40 @@
+import { listAudit } from '../../../shared/contracts/audit.contract.ts'
+import type { Role } from '../../../shared/domain/permissions/roles.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Route } from '../../platform/http/route.ts'
+import { presentAuditEntry } from './audit.present.ts'
+import type { AuditFilter, AuditRow, AuditScope } from './audit.reads.ts'
+
+/** The part of the trail that roles open: all of it, clinical and one's own, or one's own. */
+export function auditScopeOf(personId: string, held: readonly Role[]): AuditScope {
+  const sees = (condition: 'clinical-and-own' | 'clinical-text-withheld') =>
+    decide('audit.read', held, { [condition]: true }).allowed
+  return {
+    ownOf: sees('clinical-text-withheld') ? null : personId,
+    clinical: sees('clinical-and-own'),
+  }
+}
+
+export function auditRoutes(
+  read: (scope: AuditScope, filter: AuditFilter) => Promise<{ rows: AuditRow[]; total: number }>,
+): Route[] {
+  return [
+    route(listAudit, async ({ query, context }) => {
+      const { personId, roles } = context.actor
+      if (personId === null) throw new Problem('not-signed-in')
+      const limit = query.limit ?? 50
+      const { q, subjectKind, subjectId } = query
+      const before = query.cursor === undefined ? null : Number(query.cursor)
+      const { rows, total } = await read(auditScopeOf(personId, roles), { q, subjectKind, subjectId, before, limit })
+      const mayReadClinical = decide('chart.read', roles, {}).allowed
+      const last = rows.at(-1)
+      return {
+        rows: rows.map((row) => presentAuditEntry(row, mayReadClinical || row.actor_id === personId)),
+        total,
+        nextCursor: last && rows.length === limit && Number(last.seq) > 1 ? last.seq : null,
+      }
+    }),
+  ]
+}

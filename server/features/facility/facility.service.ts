@@ -1,0 +1,110 @@
+import { checkSetting, itemsOf } from '../../../shared/domain/settings/check-setting.ts'
+import { settingKeys, settings } from '../../../shared/domain/settings/settings.ts'
+import type { SettingKey } from '../../../shared/domain/settings/settings.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date-of.ts'
+import { settingNames, settingRefusals } from '../../../shared/messages/settings.ts'
+import type { Setting } from '../../../shared/contracts/facility.contract.ts'
+import type { Ids } from '../../platform/ids.ts'
+import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
+import { presentSetting } from './facility.present.ts'
+import { insertConfirmation, insertSettingVersion, takeNumber } from './facility.repository.ts'
+import type { SettingRow } from './facility.reads.ts'
+
+export interface FacilityParts {
+  transactions: Transactions
+  ids: Ids
+  readVersions(key?: string): Promise<SettingRow[]>
+  readConfirmed(key: string, tx?: Tx): Promise<string | null>
+}
+
+/** Kinds of human numbers and the form each takes; zeros in braces are the running number. */
+const fixedForms = { order: 'TO-{0000}', case: 'Q-{000}', transaction: 'TR-{0000}', permit: 'PM-{000}' } as const
+export type NumberKind = keyof typeof fixedForms | 'accession'
+
+/** Puts a running number into a form such as `HP-{0000}`. */
+export function formatNumber(form: string, number: number): string {
+  return form.replace(/\{(0+)\}/, (_all, zeros: string) => String(number).padStart(zeros.length, '0'))
+}
+
+export function createFacilityService(parts: FacilityParts) {
+  async function valueOf(key: SettingKey, tx?: Tx): Promise<string> {
+    return (await parts.readConfirmed(key, tx)) ?? settings[key].default
+  }
+  async function settingOf(key: SettingKey): Promise<Setting> {
+    return presentSetting(key, await parts.readVersions(key))
+  }
+
+  return {
+    valueOf,
+    async listSettings(): Promise<Setting[]> {
+      const rows = await parts.readVersions()
+      return settingKeys.map((key) => presentSetting(key, rows.filter((row) => row.key === key)))
+    },
+    settingOf,
+    async proposeSetting(context: RequestContext, key: SettingKey, given: { id: string; value: string; reason?: string }) {
+      const checked = checkSetting(settings[key], given.value)
+      if (!checked.ok)
+        throw new Problem('bad-input', {
+          errors: [{ pointer: '/value', detail: settingRefusals[checked.refusal.code], code: checked.refusal.code }],
+          detail: settingRefusals[checked.refusal.code],
+        })
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const row = {
+          id: given.id,
+          key,
+          value: checked.value,
+          reason: given.reason ?? null,
+          proposedAt: tx.at,
+          proposedBy: tx.actor.personId,
+        }
+        const { created } = await insertSettingVersion(tx, row)
+        if (created)
+          tx.audit({
+            action: 'setting.propose',
+            subject: { kind: 'setting', id: key, label: settingNames[key] },
+            before: { value: await valueOf(key, tx) },
+            after: { value: checked.value, reason: given.reason },
+          })
+      })
+    },
+    async confirmSetting(context: RequestContext, key: SettingKey, proposalId: string) {
+      const proposal = (await parts.readVersions(key)).find((row) => row.id === proposalId)
+      if (!proposal) throw new Problem('not-found')
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const before = await valueOf(key, tx)
+        await insertConfirmation(tx, {
+          id: parts.ids.next(),
+          settingVersionId: proposalId,
+          confirmedAt: tx.at,
+          confirmedBy: tx.actor.personId,
+          reason: null,
+        })
+        tx.audit({
+          action: 'setting.confirm',
+          subject: { kind: 'setting', id: key, label: settingNames[key] },
+          before: { value: before },
+          after: { value: proposal.value },
+        })
+      })
+    },
+    async zone(tx?: Tx): Promise<string> {
+      return valueOf('facility.zone', tx)
+    },
+    /** The facility's calendar date of an instant. */
+    async dateOf(at: Date, tx?: Tx): Promise<string> {
+      return facilityDateOf(at.toISOString(), await valueOf('facility.zone', tx))
+    },
+    async acceptedJurisdictions(tx?: Tx): Promise<string[]> {
+      return itemsOf(await valueOf('facility.jurisdictions', tx))
+    },
+    /** The next human number of a kind: unique, never reused, drawn under a lock. */
+    async nextNumber(tx: Tx, kind: NumberKind): Promise<string> {
+      const form = kind === 'accession' ? await valueOf('numbers.accession', tx) : fixedForms[kind]
+      return formatNumber(form, await takeNumber(tx, kind))
+    },
+  }
+}
+
+export type FacilityService = ReturnType<typeof createFacilityService>

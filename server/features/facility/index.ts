@@ -1,0 +1,17 @@
+import type { Parts } from '../../platform/parts.ts'
+import { readConfirmedValue, readSettingVersions } from './facility.reads.ts'
+import { facilityRoutes } from './facility.routes.ts'
+import { createFacilityService } from './facility.service.ts'
+import { SettingConfirmation, SettingVersion } from './setting.entity.ts'
+
+export type { FacilityService, NumberKind } from './facility.service.ts'
+export const facilityEntities = [SettingVersion, SettingConfirmation]
+
+export function createFacility(parts: Parts) {
+  const service = createFacilityService({
+    ...parts,
+    readVersions: (key) => readSettingVersions(parts.dataSource, key),
+    readConfirmed: (key, tx) => readConfirmedValue(tx?.manager ?? parts.dataSource, key),
+  })
+  return { service, routes: facilityRoutes(service) }
+}

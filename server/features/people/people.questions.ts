@@ -1,0 +1,45 @@
+import type { Db } from '../../platform/database/db.ts'
+import type { SignedIn } from '../../platform/http/guard.ts'
+import type { FacilityService } from '../facility/index.ts'
+import { presentLicence } from './people.present.ts'
+import { readPerson } from './people.reads.ts'
+
+/** A licence that counts on the day of the act, as it stands on what is signed. */
+export interface ValidLicence {
+  jurisdiction: string
+  number: string
+  validUntil: string
+}
+
+/** Narrow answers that other features and the sign-in need of people. */
+export function createPeopleQuestions(parts: {
+  dataSource: Db
+  now(): Date
+  facility: FacilityService
+}) {
+  return {
+    /** The person behind a session, with the roles held at this moment; null when the account is closed or gone. */
+    async signedIn(personId: string): Promise<SignedIn | null> {
+      const row = await readPerson(parts.dataSource, personId)
+      if (!row?.active) return null
+      return {
+        personId: row.id,
+        printedName: row.printed_name,
+        roles: row.roles,
+        mustChangePassword: row.must_change_password,
+      }
+    },
+    /** A licence of this person valid on the facility day of `at` for an accepted jurisdiction, the longest one; or null. */
+    async validLicence(personId: string, at: Date, db: Db = parts.dataSource) {
+      const row = await readPerson(db, personId)
+      const today = { on: await parts.facility.dateOf(at), accepted: await parts.facility.acceptedJurisdictions() }
+      const valid = (row?.licences ?? []).find((licence) => presentLicence(licence, today).state === 'valid')
+      const found: ValidLicence | null = valid
+        ? { jurisdiction: valid.jurisdiction, number: valid.number, validUntil: valid.valid_until }
+        : null
+      return found
+    },
+  }
+}
+
+export type PeopleQuestions = ReturnType<typeof createPeopleQuestions>

@@ -1,0 +1,227 @@
+import type { Role } from '../../../shared/domain/permissions/roles.ts'
+import type { Ids } from '../../platform/ids.ts'
+import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
+import { hashPassword, isPassword, makeOneTimePassword } from '../../platform/sign-in/passwords.ts'
+import * as repository from './people.repository.ts'
+
+export interface PeopleParts {
+  transactions: Transactions
+  ids: Ids
+  readPasswordHash(id: string): Promise<string | null>
+}
+
+const subject = (person: { id: string; printedName: string }) => ({
+  kind: 'person',
+  id: person.id,
+  label: person.printedName,
+})
+
+export function createPeopleService(parts: PeopleParts) {
+  async function setRoles(tx: Tx, personId: string, wanted: readonly Role[]): Promise<Role[]> {
+    const held = await repository.rolesHeld(tx, personId)
+    for (const role of held.filter((role) => !wanted.includes(role))) await repository.withdrawRole(tx, personId, role)
+    for (const role of wanted.filter((role) => !held.includes(role)))
+      await repository.grantRole(tx, {
+        id: parts.ids.next(),
+        personId,
+        role,
+        grantedAt: tx.at,
+        grantedBy: tx.actor.personId,
+        withdrawnAt: null,
+        withdrawnBy: null,
+      })
+    return held
+  }
+
+  return {
+    /**
+     * Enters a person with a one-time password, or with a given one for the first administrator and the demo.
+     * @returns the one-time password, shown once; null when the same person was entered before
+     */
+    async enterPerson(
+      context: RequestContext,
+      given: { id: string; email: string; printedName: string; roles: Role[]; password?: string },
+    ): Promise<{ oneTimePassword: string | null }> {
+      const password = given.password ?? makeOneTimePassword()
+      const passwordHash = await hashPassword(password)
+      const created = await parts.transactions.inTransaction(context, async (tx) => {
+        const row = {
+          id: given.id,
+          email: given.email,
+          printedName: given.printedName,
+          passwordHash,
+          mustChangePassword: given.password === undefined,
+          active: true,
+          preferences: {},
+          lastSignInAt: null,
+          createdAt: tx.at,
+          version: 1,
+        }
+        const inserted = await repository.insertPerson(tx, row)
+        if (!inserted.created) return false
+        await setRoles(tx, given.id, given.roles)
+        tx.audit({
+          action: 'person.enter',
+          subject: subject(row),
+          after: { email: row.email, printedName: row.printedName, roles: [...given.roles].sort() },
+        })
+        return true
+      })
+      return { oneTimePassword: created && given.password === undefined ? password : null }
+    },
+
+    /** Corrects name or e-mail, sets roles, closes or reopens the account. The last administrator stays one. */
+    async correctPerson(
+      context: RequestContext,
+      id: string,
+      given: { expectedVersion: number; email: string; printedName: string; roles: Role[]; active: boolean },
+    ): Promise<void> {
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const before = await repository.lockPerson(tx, id)
+        if (!before) throw new Problem('not-found')
+        const staysAdministrator = given.active && given.roles.includes('administrator')
+        const held = await repository.rolesHeld(tx, id)
+        if (before.active && held.includes('administrator') && !staysAdministrator) {
+          if ((await repository.countOtherAdministrators(tx, id)) === 0)
+            throw new Problem('last-administrator', { detail: 'Make somebody else administrator first.' })
+        }
+        await repository.savePerson(
+          tx,
+          { id, version: given.expectedVersion },
+          { email: given.email, printedName: given.printedName, active: given.active },
+        )
+        await setRoles(tx, id, given.roles)
+        if (!given.active) await repository.endSessions(tx, id)
+        tx.audit({
+          action: 'person.correct',
+          subject: subject(given.printedName ? { id, printedName: given.printedName } : before),
+          before: { email: before.email, printedName: before.printedName, active: before.active, roles: held },
+          after: {
+            email: given.email,
+            printedName: given.printedName,
+            active: given.active,
+            roles: [...given.roles].sort(),
+          },
+        })
+      })
+    },
+
+    /** Replaces the password and ends all sessions of the person. */
+    async issueOneTimePassword(context: RequestContext, id: string): Promise<{ oneTimePassword: string | null }> {
+      const password = makeOneTimePassword()
+      const passwordHash = await hashPassword(password)
+      let issued = false
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const person = await repository.lockPerson(tx, id)
+        if (!person) throw new Problem('not-found')
+        await repository.setPassword(tx, id, passwordHash, true)
+        await repository.endSessions(tx, id)
+        tx.audit({ action: 'person.issue-one-time-password', subject: subject(person) })
+        issued = true
+      })
+      return { oneTimePassword: issued ? password : null }
+    },
+
+    async changeOwnPassword(
+      context: RequestContext,
+      given: { currentPassword: string; newPassword: string },
+    ): Promise<void> {
+      const id = context.actor.personId
+      const current = id === null ? null : await parts.readPasswordHash(id)
+      if (id === null || current === null) throw new Problem('not-signed-in')
+      if (!(await isPassword(current, given.currentPassword)))
+        throw new Problem('password-wrong', {
+          errors: [{ pointer: '/currentPassword', detail: 'This is not your password until now.' }],
+        })
+      if (given.newPassword === given.currentPassword)
+        throw new Problem('password-too-weak', {
+          errors: [{ pointer: '/newPassword', detail: 'Choose a password that differs from the one until now.' }],
+        })
+      const passwordHash = await hashPassword(given.newPassword)
+      await parts.transactions.inTransaction(context, async (tx) => {
+        await repository.setPassword(tx, id, passwordHash, false)
+        tx.audit({
+          action: 'person.change-password',
+          subject: { kind: 'person', id, label: context.actor.printedName },
+        })
+      })
+    },
+
+    async setPreference(context: RequestContext, name: string, value: string): Promise<void> {
+      const id = context.actor.personId
+      if (id === null) throw new Problem('not-signed-in')
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const person = await repository.lockPerson(tx, id)
+        if (!person) throw new Problem('not-found')
+        const before = person.preferences[name] ?? null
+        await repository.setPreferences(tx, id, { ...person.preferences, [name]: value })
+        tx.audit({
+          action: 'person.set-preference',
+          subject: subject(person),
+          before: { [name]: before },
+          after: { [name]: value },
+        })
+      })
+    },
+
+    async noteSignIn(context: RequestContext): Promise<void> {
+      const { personId, printedName } = context.actor
+      if (personId === null) return
+      await parts.transactions.inTransaction(context, async (tx) => {
+        await repository.noteSignIn(tx, personId)
+        tx.audit({ action: 'person.sign-in', subject: { kind: 'person', id: personId, label: printedName } })
+      })
+    },
+
+    async enterLicence(
+      context: RequestContext,
+      personId: string,
+      given: { id: string; jurisdiction: string; number: string; validFrom: string; validUntil: string },
+    ): Promise<void> {
+      if (given.validUntil < given.validFrom)
+        throw new Problem('period-reversed', {
+          errors: [{ pointer: '/validUntil', detail: 'The last day has to be on or after the first day.' }],
+        })
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const person = await repository.lockPerson(tx, personId)
+        if (!person) throw new Problem('not-found')
+        const row = { ...given, personId, recordedAt: tx.at, recordedBy: tx.actor.personId }
+        const { created } = await repository.insertLicence(tx, row)
+        if (!created) return
+        const { jurisdiction, number, validFrom, validUntil } = given
+        tx.audit({
+          action: 'licence.enter',
+          subject: subject(person),
+          after: { jurisdiction, number, validFrom, validUntil },
+        })
+      })
+    },
+
+    /** Voids a licence with a reason; voiding it a second time changes nothing. */
+    async voidLicence(context: RequestContext, personId: string, licenceId: string, reason: string): Promise<void> {
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const person = await repository.lockPerson(tx, personId)
+        const licence = await repository.findLicence(tx, licenceId)
+        if (!person || licence?.personId !== personId) throw new Problem('not-found')
+        if (await repository.isVoid(tx, licenceId)) return
+        await repository.insertLicenceVoid(tx, {
+          id: parts.ids.next(),
+          licenceId,
+          reason,
+          recordedAt: tx.at,
+          recordedBy: tx.actor.personId,
+        })
+        tx.audit({
+          action: 'licence.void',
+          subject: subject(person),
+          before: { jurisdiction: licence.jurisdiction, number: licence.number },
+          after: { reason },
+        })
+      })
+    },
+  }
+}
+
+export type PeopleService = ReturnType<typeof createPeopleService>

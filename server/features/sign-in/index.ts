@@ -1,0 +1,2 @@
+export { createAuthenticator, personOf, signInRoutes } from './sign-in.routes.ts'
+export { createMeReader } from './read-me.ts'
