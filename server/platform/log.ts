@@ -7,6 +7,12 @@ export type Log = Logger
 export function createLog(level: string): Log {
   return pino({
     level,
-    redact: ['req.headers.cookie', 'req.headers.authorization', '*.password', '*.currentPassword', '*.newPassword'],
+    redact: [
+      'req.headers.cookie',
+      'req.headers.authorization',
+      '*.password',
+      '*.currentPassword',
+      '*.newPassword',
+    ],
   })
 }

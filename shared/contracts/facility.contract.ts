@@ -8,7 +8,9 @@ const SettingKeyName = z.enum(settingKeys as [string, ...string[]]).describe('Ke
 export const Setting = z.object({
   key: SettingKeyName,
   value: z.string().describe('The value in force'),
-  state: z.enum(['default', 'confirmed']).describe('Project default, not confirmed; or confirmed by a person'),
+  state: z
+    .enum(['default', 'confirmed'])
+    .describe('Project default, not confirmed; or confirmed by a person'),
   confirmedBy: z.string().nullable().describe('Who confirmed it'),
   confirmedAt: Instant.nullable().describe('When it was confirmed'),
   proposal: z
@@ -41,7 +43,11 @@ export const proposeSetting = contract({
   action: 'facility.manage',
   summary: 'Propose a value for a setting',
   params: z.strictObject({ key: SettingKeyName }),
-  body: z.strictObject({ id: RecordId, value: z.string().max(500).describe('The value'), reason: Reason.optional() }),
+  body: z.strictObject({
+    id: RecordId,
+    value: z.string().max(500).describe('The value'),
+    reason: Reason.optional(),
+  }),
   reply: { 201: Setting },
   problems: ['id-already-used'],
   idempotent: 'by-record-id',

@@ -8,7 +8,8 @@ export type Json = string | number | boolean | null | Json[] | { [key: string]: 
  * @refuses by throwing: a number that is not finite is a bug in the caller, and has no JSON form
  */
 export function canonicalJson(value: Json): string {
-  if (typeof value === 'number' && !Number.isFinite(value)) throw new Error('A number that is not finite has no JSON form')
+  if (typeof value === 'number' && !Number.isFinite(value))
+    throw new Error('A number that is not finite has no JSON form')
   if (value === null || typeof value !== 'object') return JSON.stringify(value)
   if (Array.isArray(value)) return `[${value.map(canonicalJson).join(',')}]`
   const keys = Object.keys(value)

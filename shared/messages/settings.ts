@@ -13,7 +13,8 @@ export const settingNames = defineMessages({
 
 export const settingHints = defineMessages({
   'facility.name': 'Printed at the head of every document.',
-  'facility.zone': 'A zone of the IANA list, for example America/Halifax. Quarantine days are calendar dates in it.',
+  'facility.zone':
+    'A zone of the IANA list, for example America/Halifax. Quarantine days are calendar dates in it.',
   'facility.jurisdictions': 'Separate several with commas, as written on the licences.',
   'facility.paper': 'A4 or Letter, for every printed document.',
   'facility.gallon': 'Refused asks each time which gallon is meant.',

@@ -52,6 +52,9 @@ export async function readAudit(
       ORDER BY a.seq DESC LIMIT $7`,
     [...values, filter.before, filter.limit],
   )
-  const [count]: { n: string }[] = await db.query(`SELECT count(*) AS n FROM audit_entries a WHERE ${where}`, values)
+  const [count]: { n: string }[] = await db.query(
+    `SELECT count(*) AS n FROM audit_entries a WHERE ${where}`,
+    values,
+  )
   return { rows, total: Number(count?.n ?? 0) }
 }

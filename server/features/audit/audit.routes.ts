@@ -27,7 +27,13 @@ export function auditRoutes(
       const limit = query.limit ?? 50
       const { q, subjectKind, subjectId } = query
       const before = query.cursor === undefined ? null : Number(query.cursor)
-      const { rows, total } = await read(auditScopeOf(personId, roles), { q, subjectKind, subjectId, before, limit })
+      const { rows, total } = await read(auditScopeOf(personId, roles), {
+        q,
+        subjectKind,
+        subjectId,
+        before,
+        limit,
+      })
       const mayReadClinical = decide('chart.read', roles, {}).allowed
       const last = rows.at(-1)
       return {

@@ -20,7 +20,12 @@ export interface FacilityParts {
 }
 
 /** Kinds of human numbers and the form each takes; zeros in braces are the running number. */
-const fixedForms = { order: 'TO-{0000}', case: 'Q-{000}', transaction: 'TR-{0000}', permit: 'PM-{000}' } as const
+const fixedForms = {
+  order: 'TO-{0000}',
+  case: 'Q-{000}',
+  transaction: 'TR-{0000}',
+  permit: 'PM-{000}',
+} as const
 export type NumberKind = keyof typeof fixedForms | 'accession'
 
 /** Puts a running number into a form such as `HP-{0000}`. */
@@ -40,14 +45,25 @@ export function createFacilityService(parts: FacilityParts) {
     valueOf,
     async listSettings(): Promise<Setting[]> {
       const rows = await parts.readVersions()
-      return settingKeys.map((key) => presentSetting(key, rows.filter((row) => row.key === key)))
+      return settingKeys.map((key) =>
+        presentSetting(
+          key,
+          rows.filter((row) => row.key === key),
+        ),
+      )
     },
     settingOf,
-    async proposeSetting(context: RequestContext, key: SettingKey, given: { id: string; value: string; reason?: string }) {
+    async proposeSetting(
+      context: RequestContext,
+      key: SettingKey,
+      given: { id: string; value: string; reason?: string },
+    ) {
       const checked = checkSetting(settings[key], given.value)
       if (!checked.ok)
         throw new Problem('bad-input', {
-          errors: [{ pointer: '/value', detail: settingRefusals[checked.refusal.code], code: checked.refusal.code }],
+          errors: [
+            { pointer: '/value', detail: settingRefusals[checked.refusal.code], code: checked.refusal.code },
+          ],
           detail: settingRefusals[checked.refusal.code],
         })
       await parts.transactions.inTransaction(context, async (tx) => {

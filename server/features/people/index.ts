@@ -15,7 +15,10 @@ export const peopleEntities = [Person, PersonRole, LicenceRecord, LicenceVoid]
 
 export function createPeople(parts: Parts & { facility: FacilityService }) {
   const { dataSource, facility, clock } = parts
-  const service = createPeopleService({ ...parts, readPasswordHash: (id) => readPasswordHash(dataSource, id) })
+  const service = createPeopleService({
+    ...parts,
+    readPasswordHash: (id) => readPasswordHash(dataSource, id),
+  })
   const questions = createPeopleQuestions({ dataSource, facility, now: () => clock.now() })
   const today = async () => ({
     on: await facility.dateOf(clock.now()),

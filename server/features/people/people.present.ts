@@ -37,7 +37,11 @@ export function presentPersonRow(row: PersonReadRow, today: Today): PersonRow {
     roles: row.roles,
     active: row.active,
     mustChangePassword: row.must_change_password,
-    licenceState: states.includes('valid') ? 'valid' : states.some((state) => state !== 'void') ? 'not-valid' : 'none',
+    licenceState: states.includes('valid')
+      ? 'valid'
+      : states.some((state) => state !== 'void')
+        ? 'not-valid'
+        : 'none',
     lastSignInAt: row.last_sign_in_at?.toISOString() ?? null,
     version: row.version,
   }

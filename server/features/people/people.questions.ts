@@ -12,11 +12,7 @@ export interface ValidLicence {
 }
 
 /** Narrow answers that other features and the sign-in need of people. */
-export function createPeopleQuestions(parts: {
-  dataSource: Db
-  now(): Date
-  facility: FacilityService
-}) {
+export function createPeopleQuestions(parts: { dataSource: Db; now(): Date; facility: FacilityService }) {
   return {
     /** The person behind a session, with the roles held at this moment; null when the account is closed or gone. */
     async signedIn(personId: string): Promise<SignedIn | null> {
@@ -32,7 +28,10 @@ export function createPeopleQuestions(parts: {
     /** A licence of this person valid on the facility day of `at` for an accepted jurisdiction, the longest one; or null. */
     async validLicence(personId: string, at: Date, db: Db = parts.dataSource) {
       const row = await readPerson(db, personId)
-      const today = { on: await parts.facility.dateOf(at), accepted: await parts.facility.acceptedJurisdictions() }
+      const today = {
+        on: await parts.facility.dateOf(at),
+        accepted: await parts.facility.acceptedJurisdictions(),
+      }
       const valid = (row?.licences ?? []).find((licence) => presentLicence(licence, today).state === 'valid')
       const found: ValidLicence | null = valid
         ? { jurisdiction: valid.jurisdiction, number: valid.number, validUntil: valid.valid_until }

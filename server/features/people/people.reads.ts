@@ -59,7 +59,10 @@ export async function readCredentials(
 }
 
 export async function readPasswordHash(db: Db, id: string): Promise<string | null> {
-  const [row]: { password_hash: string }[] = await db.query(`SELECT p.password_hash FROM people p WHERE p.id = $1`, [id])
+  const [row]: { password_hash: string }[] = await db.query(
+    `SELECT p.password_hash FROM people p WHERE p.id = $1`,
+    [id],
+  )
   return row?.password_hash ?? null
 }
 
@@ -84,7 +87,10 @@ const sortColumns = {
   lastSignIn: 'p.last_sign_in_at',
 } as const
 
-export async function readPeople(db: Db, filter: PeopleFilter): Promise<{ rows: PersonReadRow[]; total: number }> {
+export async function readPeople(
+  db: Db,
+  filter: PeopleFilter,
+): Promise<{ rows: PersonReadRow[]; total: number }> {
   const where = `
     ($1::text IS NULL OR p.printed_name ILIKE $1 OR p.email ILIKE $1)
     AND ($2::text IS NULL OR EXISTS (SELECT 1 FROM person_roles r

@@ -20,7 +20,12 @@ export function savePerson(
   return updateVersioned(tx, Person, key, patch)
 }
 
-export async function setPassword(tx: Tx, id: string, passwordHash: string, mustChange: boolean): Promise<void> {
+export async function setPassword(
+  tx: Tx,
+  id: string,
+  passwordHash: string,
+  mustChange: boolean,
+): Promise<void> {
   await tx.manager.update(Person, { id }, { passwordHash, mustChangePassword: mustChange })
 }
 

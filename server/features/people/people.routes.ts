@@ -27,7 +27,9 @@ export function peopleRoutes(service: PeopleService, queries: PeopleQueries): Ro
       await service.correctPerson(context, params.id, body)
       return queries.person(params.id)
     }),
-    route(contracts.issueOneTimePassword, ({ params, context }) => service.issueOneTimePassword(context, params.id)),
+    route(contracts.issueOneTimePassword, ({ params, context }) =>
+      service.issueOneTimePassword(context, params.id),
+    ),
     route(contracts.enterLicence, async ({ params, body, context }) => {
       await service.enterLicence(context, params.id, body)
       return queries.person(params.id)

@@ -21,7 +21,8 @@ const subject = (person: { id: string; printedName: string }) => ({
 export function createPeopleService(parts: PeopleParts) {
   async function setRoles(tx: Tx, personId: string, wanted: readonly Role[]): Promise<Role[]> {
     const held = await repository.rolesHeld(tx, personId)
-    for (const role of held.filter((role) => !wanted.includes(role))) await repository.withdrawRole(tx, personId, role)
+    for (const role of held.filter((role) => !wanted.includes(role)))
+      await repository.withdrawRole(tx, personId, role)
     for (const role of wanted.filter((role) => !held.includes(role)))
       await repository.grantRole(tx, {
         id: parts.ids.next(),
@@ -97,7 +98,12 @@ export function createPeopleService(parts: PeopleParts) {
         tx.audit({
           action: 'person.correct',
           subject: subject(given.printedName ? { id, printedName: given.printedName } : before),
-          before: { email: before.email, printedName: before.printedName, active: before.active, roles: held },
+          before: {
+            email: before.email,
+            printedName: before.printedName,
+            active: before.active,
+            roles: held,
+          },
           after: {
             email: given.email,
             printedName: given.printedName,
@@ -109,7 +115,10 @@ export function createPeopleService(parts: PeopleParts) {
     },
 
     /** Replaces the password and ends all sessions of the person. */
-    async issueOneTimePassword(context: RequestContext, id: string): Promise<{ oneTimePassword: string | null }> {
+    async issueOneTimePassword(
+      context: RequestContext,
+      id: string,
+    ): Promise<{ oneTimePassword: string | null }> {
       const password = makeOneTimePassword()
       const passwordHash = await hashPassword(password)
       let issued = false
@@ -137,7 +146,9 @@ export function createPeopleService(parts: PeopleParts) {
         })
       if (given.newPassword === given.currentPassword)
         throw new Problem('password-too-weak', {
-          errors: [{ pointer: '/newPassword', detail: 'Choose a password that differs from the one until now.' }],
+          errors: [
+            { pointer: '/newPassword', detail: 'Choose a password that differs from the one until now.' },
+          ],
         })
       const passwordHash = await hashPassword(given.newPassword)
       await parts.transactions.inTransaction(context, async (tx) => {
@@ -200,7 +211,12 @@ export function createPeopleService(parts: PeopleParts) {
     },
 
     /** Voids a licence with a reason; voiding it a second time changes nothing. */
-    async voidLicence(context: RequestContext, personId: string, licenceId: string, reason: string): Promise<void> {
+    async voidLicence(
+      context: RequestContext,
+      personId: string,
+      licenceId: string,
+      reason: string,
+    ): Promise<void> {
       await parts.transactions.inTransaction(context, async (tx) => {
         const person = await repository.lockPerson(tx, personId)
         const licence = await repository.findLicence(tx, licenceId)

@@ -5,10 +5,15 @@ import type { People } from '../people/index.ts'
 
 export type MeReader = (person: SignedIn) => Promise<Me>
 
-const gallonOf = (value: string): 'us' | 'imperial' | null => (value === 'us' || value === 'imperial' ? value : null)
+const gallonOf = (value: string): 'us' | 'imperial' | null =>
+  value === 'us' || value === 'imperial' ? value : null
 
 /** What the client's shell needs to know of the person who is signed in. */
-export function createMeReader(parts: { people: People; facility: FacilityService; demo: boolean }): MeReader {
+export function createMeReader(parts: {
+  people: People
+  facility: FacilityService
+  demo: boolean
+}): MeReader {
   return async (signedIn) => {
     const { people, facility } = parts
     const person = await people.queries.person(signedIn.personId)

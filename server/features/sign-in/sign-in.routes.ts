@@ -1,6 +1,6 @@
 import type { Request } from 'express'
+import type {} from 'express-session'
 import passport from 'passport'
-import type { Authenticator } from 'passport'
 import { Strategy } from 'passport-local'
 import * as contracts from '../../../shared/contracts/sign-in.contract.ts'
 import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
@@ -18,9 +18,12 @@ export function personOf(req: Request): SignedIn | null {
   return (req.user as SignedIn | undefined) ?? null
 }
 
+const makePassport = () => new passport.Passport()
+export type Authenticator = ReturnType<typeof makePassport>
+
 /** Passport with the one strategy there is: e-mail and password. Sessions hold the person's id only. */
 export function createAuthenticator(people: People): Authenticator {
-  const authenticator = new passport.Passport()
+  const authenticator = makePassport()
   authenticator.use(
     new Strategy({ usernameField: 'email', session: true }, (email, password, done) => {
       const check = async (): Promise<SignedIn | false> => {
@@ -62,7 +65,9 @@ function authenticate(authenticator: Authenticator, req: Request): Promise<Signe
 }
 
 const logIn = (req: Request, person: SignedIn) =>
-  new Promise<void>((resolve, reject) => req.logIn(person, (error) => (error ? reject(error as Error) : resolve())))
+  new Promise<void>((resolve, reject) =>
+    req.logIn(person, (error) => (error ? reject(error as Error) : resolve())),
+  )
 
 const logOut = (req: Request) =>
   new Promise<void>((resolve, reject) => req.logOut((error) => (error ? reject(error as Error) : resolve())))
@@ -81,7 +86,9 @@ export function signInRoutes(parts: SignInParts): Route[] {
       const person = await authenticate(authenticator, req)
       await lockout.note({ emailKey, address: req.ip ?? '', succeeded: person !== null })
       if (!person)
-        throw new Problem('sign-in-failed', { detail: 'Check both. 5 wrong tries lock the account for 15 minutes.' })
+        throw new Problem('sign-in-failed', {
+          detail: 'Check both. 5 wrong tries lock the account for 15 minutes.',
+        })
       await logIn(req, person)
       await people.service.noteSignIn({ ...context, actor: person })
       return readMe(person)
@@ -89,7 +96,7 @@ export function signInRoutes(parts: SignInParts): Route[] {
     route(contracts.signOut, async ({ req, res }) => {
       await logOut(req)
       await new Promise<void>((resolve, reject) =>
-        req.session.destroy((error) => (error ? reject(error as Error) : resolve())),
+        req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())),
       )
       res.clearCookie('pratique.sid')
       return null

@@ -59,7 +59,11 @@ export async function verifyChain(dataSource: DataSource, pageSize = 2000): Prom
     )
     for (const row of rows) {
       const seq = Number(row.seq)
-      const broken = (why: 'gap' | 'link' | 'hash' | 'projection') => ({ entries, lastHash, brokenAt: { seq, why } })
+      const broken = (why: 'gap' | 'link' | 'hash' | 'projection') => ({
+        entries,
+        lastHash,
+        brokenAt: { seq, why },
+      })
       if (seq !== entries + 1) return broken('gap')
       if (row.previous_hash !== lastHash) return broken('link')
       if (row.hash !== chainHash(lastHash, row.text)) return broken('hash')

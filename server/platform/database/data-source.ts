@@ -6,7 +6,11 @@ import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
 export type EntityClass = (new () => object) | EntitySchema
 
 /** Connects as the runtime role. Refuses a role that could get round the ledgers. */
-export async function connectRuntime(url: string, entities: readonly EntityClass[], poolSize = 10): Promise<DataSource> {
+export async function connectRuntime(
+  url: string,
+  entities: readonly EntityClass[],
+  poolSize = 10,
+): Promise<DataSource> {
   const dataSource = new DataSource({
     type: 'postgres',
     url,

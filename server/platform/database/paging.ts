@@ -6,7 +6,9 @@ export function pageOf(query: { cursor?: string; limit?: number }): { offset: nu
   if (query.cursor === undefined) return { offset: 0, limit }
   const offset = Number(Buffer.from(query.cursor, 'base64url').toString('utf8'))
   if (!Number.isSafeInteger(offset) || offset < 0)
-    throw new Problem('bad-input', { errors: [{ pointer: '/query/cursor', detail: 'Begin again at the first page.' }] })
+    throw new Problem('bad-input', {
+      errors: [{ pointer: '/query/cursor', detail: 'Begin again at the first page.' }],
+    })
   return { offset, limit }
 }
 

@@ -28,7 +28,9 @@ export async function prepareDatabase(ownerUrl: string, runtimePassword: string)
     )
     await guard.query(`ALTER ROLE ${runtimeRole} LOGIN PASSWORD ${guard.escapeLiteral(runtimePassword)}`)
     await guard.query(`GRANT USAGE ON SCHEMA public TO ${runtimeRole}`)
-    await guard.query(`ALTER DEFAULT PRIVILEGES IN SCHEMA public GRANT SELECT, INSERT ON TABLES TO ${runtimeRole}`)
+    await guard.query(
+      `ALTER DEFAULT PRIVILEGES IN SCHEMA public GRANT SELECT, INSERT ON TABLES TO ${runtimeRole}`,
+    )
     await guard.query(`ALTER DEFAULT PRIVILEGES IN SCHEMA public GRANT USAGE ON SEQUENCES TO ${runtimeRole}`)
     await migrate(ownerUrl)
     await guard.query(`REVOKE INSERT ON migrations FROM ${runtimeRole}`)

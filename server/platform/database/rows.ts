@@ -27,7 +27,8 @@ export async function updateVersioned<T extends ObjectLiteral & { id: string; ve
   })
 }
 
-const comparable = (value: unknown) => JSON.stringify(value instanceof Date ? value.toISOString() : (value ?? null))
+const comparable = (value: unknown) =>
+  JSON.stringify(value instanceof Date ? value.toISOString() : (value ?? null))
 
 /**
  * Writes a record under its own id, once. The same id with the same content is the same request sent again and

@@ -51,10 +51,17 @@ function parsePart(schema: z.ZodType | undefined, value: unknown, root: string) 
 function parseCall(of: Contract, req: Request) {
   const params = parsePart(of.params, req.params, '/params')
   const query = parsePart(of.query, req.query, '/query')
-  const body = of.consumes === 'multipart' ? { value: undefined, errors: [] } : parsePart(of.body, req.body, '')
+  const body =
+    of.consumes === 'multipart' ? { value: undefined, errors: [] } : parsePart(of.body, req.body, '')
   const errors = [...params.errors, ...query.errors, ...body.errors]
   if (errors.length > 0)
-    throw new Problem('bad-input', { errors, detail: errors.map((e) => e.detail).slice(0, 3).join(' · ') })
+    throw new Problem('bad-input', {
+      errors,
+      detail: errors
+        .map((e) => e.detail)
+        .slice(0, 3)
+        .join(' · '),
+    })
   return { params: params.value, query: query.value, body: body.value }
 }
 
@@ -63,7 +70,9 @@ function contextOf(of: Contract, req: Request, person: SignedIn | null, content:
   if (of.idempotent !== 'by-key') return context
   const key = req.get('idempotency-key')
   if (!key || key.length > 100)
-    throw new Problem('idempotency-key-missing', { detail: 'Send a new UUID with each command, the same one on a retry.' })
+    throw new Problem('idempotency-key-missing', {
+      detail: 'Send a new UUID with each command, the same one on a retry.',
+    })
   return { ...context, command: { key, contractId: of.id, bodyHash: bodyHashOf(content) } }
 }
 

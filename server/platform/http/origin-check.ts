@@ -16,7 +16,8 @@ export function checkOrigin(publicUrl: string | null): RequestHandler {
     const origin = req.get('origin')
     if (origin) {
       const host = URL.canParse(origin) ? new URL(origin).host : null
-      if (host === null || (host !== req.get('host') && host !== expected)) throw new Problem('foreign-origin')
+      if (host === null || (host !== req.get('host') && host !== expected))
+        throw new Problem('foreign-origin')
     }
     next()
   }

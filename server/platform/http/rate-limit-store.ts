@@ -20,7 +20,9 @@ export function createRateLimitStore(dataSource: DataSource, prefix: string): St
       return { totalHits: row?.hits ?? 1, resetTime: row?.resets_at }
     },
     async decrement(key) {
-      await dataSource.query(`UPDATE rate_limits SET hits = greatest(hits - 1, 0) WHERE key = $1`, [keyOf(key)])
+      await dataSource.query(`UPDATE rate_limits SET hits = greatest(hits - 1, 0) WHERE key = $1`, [
+        keyOf(key),
+      ])
     },
     async resetKey(key) {
       await dataSource.query(`DELETE FROM rate_limits WHERE key = $1`, [keyOf(key)])

@@ -11,7 +11,10 @@ export function fieldProblems(error: z.ZodError, root = ''): FieldProblem[] {
   return error.issues.flatMap((issue) => {
     const pointer = [root, ...issue.path.map(String)].join('/')
     if (issue.code === 'unrecognized_keys')
-      return issue.keys.map((key) => ({ pointer: `${pointer}/${key}`, detail: 'This field is not known here' }))
+      return issue.keys.map((key) => ({
+        pointer: `${pointer}/${key}`,
+        detail: 'This field is not known here',
+      }))
     return [{ pointer, detail: issue.message }]
   })
 }
@@ -36,7 +39,8 @@ function asProblem(error: unknown): Problem | null {
   const { type, status } = error as { type?: string; status?: number }
   if (type === 'entity.parse.failed' || type === 'encoding.unsupported' || type === 'charset.unsupported')
     return new Problem('malformed-json', { detail: 'Send JSON in UTF-8.' })
-  if (type === 'entity.too.large') return new Problem('file-too-large', { detail: 'The request is over 1 MB.' })
+  if (type === 'entity.too.large')
+    return new Problem('file-too-large', { detail: 'The request is over 1 MB.' })
   // Express refuses an address it cannot decode, such as /people/%
   if (error instanceof URIError || status === 400)
     return new Problem('malformed-json', { detail: 'The request could not be read.' })
@@ -48,15 +52,20 @@ export function problemEdge(log: Log): ErrorRequestHandler {
   return (error: unknown, req: Request, res: Response, next) => {
     if (res.headersSent) return next(error)
     const known = asProblem(error)
-    if (!known) log.error({ err: error, request_id: requestIdOf(req), url: req.originalUrl }, 'unexpected failure')
+    if (!known)
+      log.error({ err: error, request_id: requestIdOf(req), url: req.originalUrl }, 'unexpected failure')
     const problem =
       known ??
       new Problem('outside-working-order', {
-        detail: 'Nothing was half saved. Try again; if it stays, give the request number to whoever runs Pratique.',
+        detail:
+          'Nothing was half saved. Try again; if it stays, give the request number to whoever runs Pratique.',
       })
     if (problem.status === 503 || problem.status === 429)
       res.setHeader('Retry-After', String(problem.details.extra?.['retry_after_seconds'] ?? 5))
-    res.status(problem.status).type('application/problem+json').send(JSON.stringify(problemBody(problem, req)))
+    res
+      .status(problem.status)
+      .type('application/problem+json')
+      .send(JSON.stringify(problemBody(problem, req)))
   }
 }
 

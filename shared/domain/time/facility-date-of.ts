@@ -9,6 +9,11 @@ export type LocalDate = string
  * @returns `YYYY-MM-DD`; a daylight-saving change never gains or loses a day
  */
 export function facilityDateOf(instant: string, zone: string): LocalDate {
-  const format = new Intl.DateTimeFormat('en-CA', { timeZone: zone, year: 'numeric', month: '2-digit', day: '2-digit' })
+  const format = new Intl.DateTimeFormat('en-CA', {
+    timeZone: zone,
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+  })
   return format.format(new Date(instant))
 }

@@ -1,0 +1,113 @@
+import connectPgSimple from 'connect-pg-simple'
+import express from 'express'
+import type { Express, RequestHandler } from 'express'
+import { rateLimit } from 'express-rate-limit'
+import session from 'express-session'
+import { pinoHttp } from 'pino-http'
+import type { Composition } from './composition.ts'
+import type { Config } from './config.ts'
+import { personOf } from './features/sign-in/index.ts'
+import { poolOf } from './platform/database/data-source.ts'
+import { mountRoutes } from './platform/http/mount-routes.ts'
+import { checkOrigin } from './platform/http/origin-check.ts'
+import { openApiDocument } from './platform/http/openapi.ts'
+import { Problem } from './platform/http/problem.ts'
+import { createRateLimitStore } from './platform/http/rate-limit-store.ts'
+import { giveRequestId, requestIdOf } from './platform/http/request-id.ts'
+import { securityHeaders } from './platform/http/security-headers.ts'
+import { problemEdge, unknownRoute } from './platform/http/to-problem.ts'
+
+const sessionHours = 8
+/** Sign-in attempts from one address in a quarter of an hour, over all accounts. */
+const signInsPerAddress = 60
+
+export interface AppParts {
+  config: Pick<Config, 'sessionSecret' | 'publicUrl' | 'mode'>
+  composition: Composition
+  /** Pages and assets: built files or the development server; absent in API tests. */
+  pages?: RequestHandler
+}
+
+/** The Express application; listens to nothing. `close` stops the session store's timer. */
+export function createApp({ config, composition, pages }: AppParts): { app: Express; close(): void } {
+  const { parts } = composition
+  const tls = config.publicUrl?.startsWith('https:') ?? false
+  const app = express()
+  app.disable('x-powered-by')
+  // One reverse proxy in front ends TLS where there is a public https address
+  if (tls) app.set('trust proxy', 1)
+  app.use(giveRequestId)
+  app.use(pinoHttp({ logger: parts.log, genReqId: (req) => requestIdOf(req as express.Request) }))
+  if (config.mode !== 'development') app.use(securityHeaders(tls))
+
+  const PgStore = connectPgSimple(session)
+  const store = new PgStore({
+    pool: poolOf(parts.dataSource),
+    tableName: 'session',
+    pruneSessionInterval: 900,
+  })
+  const api = express.Router()
+
+  api.get('/health', (_req, res) => void res.json({ status: 'ok' }))
+  api.get('/ready', async (_req, res) => {
+    const ready = await parts.dataSource.query('SELECT 1').then(
+      () => true,
+      () => false,
+    )
+    res.status(ready ? 200 : 503).json({ status: ready ? 'ok' : 'no database' })
+  })
+  api.use((_req, res, next) => {
+    res.setHeader('Cache-Control', 'private, no-store')
+    next()
+  })
+  api.use(checkOrigin(config.publicUrl))
+  api.use(
+    session({
+      name: 'pratique.sid',
+      secret: config.sessionSecret,
+      store,
+      resave: false,
+      saveUninitialized: false,
+      rolling: true,
+      cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', maxAge: sessionHours * 3_600_000 },
+    }),
+  )
+  api.use(composition.authenticator.session())
+  api.post(
+    '/sign-in',
+    rateLimit({
+      windowMs: 15 * 60_000,
+      limit: signInsPerAddress,
+      store: createRateLimitStore(parts.dataSource, 'sign-in'),
+      standardHeaders: 'draft-8',
+      legacyHeaders: false,
+      handler: () => {
+        throw new Problem('too-many-requests', {
+          detail: 'Too many sign-ins from this address. Wait 15 min.',
+          extra: { retry_after_seconds: 900 },
+        })
+      },
+    }),
+  )
+  api.get('/openapi.json', (req, res) => {
+    if (!personOf(req)) throw new Problem('not-signed-in')
+    res.json(openApiDocument())
+  })
+  mountRoutes(api, composition.routes, {
+    personOf,
+    onRefusal: (contract, person, requestId) =>
+      parts.transactions.inTransaction({ actor: person, requestId }, async (tx) =>
+        tx.audit({
+          action: 'permission.refuse',
+          subject: { kind: 'route', id: contract.id, label: contract.summary },
+          after: { action: contract.action, roles: [...person.roles] },
+        }),
+      ),
+  })
+  api.use(unknownRoute)
+
+  app.use('/api', api)
+  if (pages) app.use(pages)
+  app.use(problemEdge(parts.log))
+  return { app, close: () => store.close() }
+}
