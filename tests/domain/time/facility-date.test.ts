@@ -10,14 +10,22 @@ import {
   wallClockOf,
 } from '../../../shared/domain/time/facility-date.ts'
 
-const zones = ['Europe/Lisbon', 'America/New_York', 'Australia/Lord_Howe', 'Asia/Kathmandu', 'Pacific/Kiritimati', 'UTC']
+const zones = [
+  'Europe/Lisbon',
+  'America/New_York',
+  'Australia/Lord_Howe',
+  'Asia/Kathmandu',
+  'Pacific/Kiritimati',
+  'UTC',
+]
 const aDate = fc
   .integer({ min: Date.UTC(1990, 0, 1) / 86_400_000, max: Date.UTC(2060, 0, 1) / 86_400_000 })
   .map((day) => new Date(day * 86_400_000).toISOString().slice(0, 10))
 
 describe('what counts as an instant or a date', () => {
-  it.each(['2026-03-28T14:00:00Z', '2026-03-28T14:00Z', '2026-03-28T14:00:00.250+01:00'])('takes %s', (text) =>
-    expect(isInstant(text)).toBe(true),
+  it.each(['2026-03-28T14:00:00Z', '2026-03-28T14:00Z', '2026-03-28T14:00:00.250+01:00'])(
+    'takes %s',
+    (text) => expect(isInstant(text)).toBe(true),
   )
   it.each([
     '2026-03-28',
@@ -54,9 +62,18 @@ describe('the facility date of an instant', () => {
   ])('%s in %s is %s', (instant, zone, date) => expect(facilityDateOf(instant, zone)).toBe(date))
 
   it('shows the hour that happens twice, and midnight as 00', () => {
-    expect(wallClockOf('2026-10-25T00:30:00Z', 'Europe/Lisbon')).toEqual({ date: '2026-10-25', time: '01:30:00' })
-    expect(wallClockOf('2026-10-25T01:30:00Z', 'Europe/Lisbon')).toEqual({ date: '2026-10-25', time: '01:30:00' })
-    expect(wallClockOf('2026-06-30T23:00:00Z', 'Europe/Lisbon')).toEqual({ date: '2026-07-01', time: '00:00:00' })
+    expect(wallClockOf('2026-10-25T00:30:00Z', 'Europe/Lisbon')).toEqual({
+      date: '2026-10-25',
+      time: '01:30:00',
+    })
+    expect(wallClockOf('2026-10-25T01:30:00Z', 'Europe/Lisbon')).toEqual({
+      date: '2026-10-25',
+      time: '01:30:00',
+    })
+    expect(wallClockOf('2026-06-30T23:00:00Z', 'Europe/Lisbon')).toEqual({
+      date: '2026-07-01',
+      time: '00:00:00',
+    })
   })
 
   it('never goes back while time goes on', () => {
@@ -86,7 +103,11 @@ describe('days on the calendar', () => {
   })
   it('adding and counting are each other’s inverse', () => {
     fc.assert(
-      fc.property(aDate, fc.integer({ min: -5000, max: 5000 }), (date, n) => daysBetween(date, addDays(date, n)) === n),
+      fc.property(
+        aDate,
+        fc.integer({ min: -5000, max: 5000 }),
+        (date, n) => daysBetween(date, addDays(date, n)) === n,
+      ),
     )
   })
 })

@@ -31,13 +31,21 @@ describe('the instant of a local time', () => {
   it('is the first instant of its date in every zone', () => {
     fc.assert(
       fc.property(
-        fc.constantFrom('Europe/Lisbon', 'America/New_York', 'Africa/Cairo', 'Australia/Lord_Howe', 'Pacific/Chatham'),
+        fc.constantFrom(
+          'Europe/Lisbon',
+          'America/New_York',
+          'Africa/Cairo',
+          'Australia/Lord_Howe',
+          'Pacific/Chatham',
+        ),
         fc.integer({ min: 0, max: 1500 }),
         (zone, n) => {
           const date = addDays('2025-01-01', n)
           const start = startOfFacilityDay(date, zone)
           const justBefore = new Date(instantToMs(start) - 1).toISOString()
-          return facilityDateOf(start, zone) === date && facilityDateOf(justBefore, zone) === addDays(date, -1)
+          return (
+            facilityDateOf(start, zone) === date && facilityDateOf(justBefore, zone) === addDays(date, -1)
+          )
         },
       ),
     )
