@@ -1,0 +1,3 @@
+import pg from 'pg'
+
+export const used = pg

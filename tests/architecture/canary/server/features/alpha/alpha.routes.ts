@@ -1,0 +1,3 @@
+import express from 'express'
+
+export const used = express

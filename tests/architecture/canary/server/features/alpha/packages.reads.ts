@@ -1,0 +1,2 @@
+// breaks: no-http-in-sql
+import 'express'

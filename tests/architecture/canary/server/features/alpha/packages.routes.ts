@@ -1,0 +1,4 @@
+// breaks: no-sql-in-routes
+import 'typeorm'
+// breaks: no-sql-in-routes
+import 'pg'

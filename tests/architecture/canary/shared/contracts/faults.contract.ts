@@ -1,0 +1,2 @@
+// breaks: contracts-know-zod
+import 'mathjs'

@@ -1,0 +1,5 @@
+export interface Thing {
+  name: string
+}
+
+export const thing: Thing = { name: 'thing' }

@@ -1,0 +1,2 @@
+export { thing } from './inside.ts'
+export type { Thing } from './inside.ts'

@@ -1,0 +1,1 @@
+export const inside = 1
