@@ -13,6 +13,20 @@ export interface Source {
 
 export const sources = {
   'project-default': { citation: 'Project default, to be confirmed by the facility', mark: 'P' },
+
+  'nist-sp-811': {
+    citation:
+      'NIST Special Publication 811 and Handbook 44 appendix C: inch, pound and US gallon by exact definition; ' +
+      'factors derived again from 1 in = 2.54 cm, 1 lb = 0.45359237 kg, 1 US gal = 231 cubic inches',
+    mark: 'C',
+  },
+  'iupac-weights': { citation: 'IUPAC abridged standard atomic weights', mark: 'C' },
+  'ismp-dose-designations': {
+    citation:
+      'Institute for Safe Medication Practices, list of error-prone abbreviations, symbols and dose designations',
+    mark: 'V2',
+  },
+  'joint-commission-do-not-use': { citation: 'Joint Commission, official “do not use” list', mark: 'V2' },
 } as const satisfies Record<string, Source>
 
 export type SourceKey = keyof typeof sources

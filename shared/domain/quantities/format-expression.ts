@@ -1,0 +1,59 @@
+import { unitOf } from '../units/unit-of.ts'
+import { unitTable, type UnitCode } from '../units/unit-table.ts'
+import { expressionUnit } from '../working/expression-unit.ts'
+import { decimalText } from './decimal.ts'
+import {
+  finiteDecimal,
+  groupThousands,
+  minusSign,
+  noBreakSpace,
+  withoutTrailingZeros,
+} from './number-text.ts'
+
+const unitByName = new Map<string, UnitCode>()
+for (const code of Object.keys(unitTable) as UnitCode[]) {
+  const name = expressionUnit(code)
+  if (name !== undefined && name !== '' && !unitByName.has(name)) unitByName.set(name, code)
+}
+
+const signs: Record<string, string> = { '*': '×', '/': '÷', '+': '+', '-': minusSign }
+const constants: Record<string, string> = { pi: '3.1416' }
+const functions: Record<string, string> = { acos: 'arccos' }
+const powers: Record<string, string> = { '^2': '²', '^3': '³' }
+const token =
+  /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d)|(?<sign> [-+*/] )|(?<other>.)/gs
+const shownDigits = 6
+
+/**
+ * The arithmetic of a working line as people write it: `pi / 4 * (0.057 m)^2 * 14.2 m to L` becomes
+ * "0.7854 × (0.057 m)² × 14.2 m". Digits as entered stay; figures longer than six significant digits, which only an
+ * earlier line can have given, are shortened.
+ *
+ * @param expression the `expression` of a working line
+ */
+export function formatExpression(expression: string): string {
+  const shown = expression.replace(/ to [^ ]+$/, '').replaceAll('pi / 4', '0.7854')
+  let text = ''
+  for (const match of shown.matchAll(token)) {
+    const { number, name, power, sign, other } = match.groups ?? {}
+    if (number !== undefined) text += shownNumber(number)
+    else if (name !== undefined) text += shownName(name)
+    else if (power !== undefined) text += powers[power] ?? power
+    else if (sign !== undefined) text += `${noBreakSpace}${signs[sign.trim()]} `
+    else if (other === ' ') text += noBreakSpace
+    else text += other === '-' ? minusSign : other
+  }
+  return text
+}
+
+function shownNumber(text: string): string {
+  const significant = text.replace(/e.*$/, '').replace('.', '').replace(/^0+/, '').length
+  if (significant <= shownDigits && !text.includes('e')) return groupThousands(text)
+  const rounded = Number(text).toPrecision(shownDigits)
+  return groupThousands(withoutTrailingZeros(decimalText(finiteDecimal(rounded))))
+}
+
+function shownName(name: string): string {
+  const code = unitByName.get(name)
+  return code === undefined ? (constants[name] ?? functions[name] ?? name) : unitOf(code).symbol
+}
