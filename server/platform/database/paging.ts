@@ -4,8 +4,9 @@ import { Problem } from '../http/problem.ts'
 export function pageOf(query: { cursor?: string; limit?: number }): { offset: number; limit: number } {
   const limit = query.limit ?? 50
   if (query.cursor === undefined) return { offset: 0, limit }
-  const offset = Number(Buffer.from(query.cursor, 'base64url').toString('utf8'))
-  if (!Number.isSafeInteger(offset) || offset < 0)
+  const text = Buffer.from(query.cursor, 'base64url').toString('utf8')
+  const offset = Number(text)
+  if (!/^\d{1,9}$/.test(text))
     throw new Problem('bad-input', {
       errors: [{ pointer: '/query/cursor', detail: 'Begin again at the first page.' }],
     })

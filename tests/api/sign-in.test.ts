@@ -1,0 +1,139 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import request from 'supertest'
+import { password, startApi } from '../support/api.ts'
+import type { TestApi } from '../support/api.ts'
+
+let api: TestApi
+beforeAll(async () => void (api = await startApi()))
+afterAll(() => api.stop())
+
+describe('sign-in', () => {
+  it('signs a person in and says who they are, without the password hash', async () => {
+    const vet = await api.as('veterinarian')
+    const me = await vet.agent.get('/api/me').expect(200)
+    expect(me.body).toMatchObject({
+      printedName: 'Test veterinarian',
+      roles: ['veterinarian'],
+      mayPractise: true,
+    })
+    expect(me.body.facility).toMatchObject({ name: 'Harrow Point Sea Hall', zone: 'America/Halifax' })
+    expect(JSON.stringify(me.body)).not.toContain('argon2')
+  })
+
+  it('sets a cookie that scripts and other sites cannot use', async () => {
+    await api.as('keeper')
+    const reply = await api
+      .anonymous()
+      .post('/api/sign-in')
+      .send({ email: 'keeper@harrow-point.example', password })
+    const [cookie] = reply.headers['set-cookie'] as unknown as string[]
+    expect(cookie).toMatch(/^pratique\.sid=.+HttpOnly; SameSite=Lax/)
+  })
+
+  it('says the same for a wrong password and for an account that does not exist', async () => {
+    await api.as('registrar')
+    const wrong = await api
+      .anonymous()
+      .post('/api/sign-in')
+      .send({ email: 'registrar@harrow-point.example', password: 'not this one' })
+    const nobody = await api
+      .anonymous()
+      .post('/api/sign-in')
+      .send({ email: 'nobody@harrow-point.example', password: 'not this one' })
+    expect(wrong.status).toBe(401)
+    const { request_id: _a, ...wrongBody } = wrong.body
+    const { request_id: _b, ...nobodyBody } = nobody.body
+    expect(wrongBody).toEqual(nobodyBody)
+    expect(wrong.type).toBe('application/problem+json')
+  })
+
+  it.each(['tired@harrow-point.example', 'not-here@harrow-point.example'])(
+    'locks %s for 15 minutes after 5 wrong tries, whether it exists or not',
+    async (email) => {
+      if (email.startsWith('tired'))
+        await api.person({ email, printedName: 'Tired Keeper', roles: ['keeper'] })
+      for (let i = 0; i < 5; i++)
+        await api.anonymous().post('/api/sign-in').send({ email, password: 'wrong' }).expect(401)
+      const locked = await api.anonymous().post('/api/sign-in').send({ email, password }).expect(429)
+      expect(locked.body.code).toBe('sign-in-locked')
+      expect(locked.body.detail).toContain('15 min')
+      expect(locked.headers['retry-after']).toBe('900')
+      const before = api.clock.now()
+      api.clock.set(new Date(before.getTime() + 15 * 60_000 + 1000))
+      await api
+        .anonymous()
+        .post('/api/sign-in')
+        .send({ email, password })
+        .expect(email.startsWith('tired') ? 200 : 401)
+      api.clock.set(before)
+    },
+  )
+
+  it('answers 401 to signed-out calls before any parameter is read', async () => {
+    const reply = await api.anonymous().get('/api/people/not-an-id').expect(401)
+    expect(reply.body.code).toBe('not-signed-in')
+    await api
+      .anonymous()
+      .post('/api/people')
+      .set('Content-Type', 'application/json')
+      .send('{broken')
+      .expect(401)
+  })
+
+  it('ends the session on sign-out', async () => {
+    const someone = await api.person({
+      email: 'out@harrow-point.example',
+      printedName: 'Out',
+      roles: ['keeper'],
+    })
+    await someone.agent.post('/api/sign-out').expect(204)
+    await someone.agent.get('/api/me').expect(401)
+  })
+
+  it('refuses a state-changing request from another site', async () => {
+    const keeper = await api.as('keeper')
+    const put = () => keeper.agent.put('/api/me/preferences/theme').send({ value: 'night' })
+    expect((await put().set('Origin', 'https://elsewhere.example')).body.code).toBe('foreign-origin')
+    expect((await put().set('Sec-Fetch-Site', 'cross-site')).body.code).toBe('foreign-origin')
+    expect((await put().set('Origin', 'null')).body.code).toBe('foreign-origin')
+    await put().expect(200)
+  })
+
+  it('asks for a new password after a one-time password, and for nothing before it', async () => {
+    const admin = await api.as('administrator')
+    const id = api.nextId()
+    const entered = await admin.agent
+      .post('/api/people')
+      .send({ id, email: 'new@harrow-point.example', printedName: 'New Hand', roles: ['keeper'] })
+      .expect(201)
+    const oneTime = entered.body.oneTimePassword as string
+    expect(oneTime).toMatch(/^[a-z2-9]{4}-[a-z2-9]{4}-[a-z2-9]{4}$/)
+    const agent = request.agent(api.app)
+    const me = await agent
+      .post('/api/sign-in')
+      .send({ email: 'new@harrow-point.example', password: oneTime })
+      .expect(200)
+    expect(me.body.mustChangePassword).toBe(true)
+    expect((await agent.get('/api/settings').expect(403)).body.code).toBe('password-change-required')
+    const change = (currentPassword: string, newPassword: string) =>
+      agent.post('/api/me/password').send({ currentPassword, newPassword })
+    expect((await change('wrong', 'long enough now').expect(403)).body.code).toBe('password-wrong')
+    expect((await change(oneTime, 'short').expect(422)).body.errors[0].pointer).toBe('/newPassword')
+    expect((await change(oneTime, oneTime).expect(422)).body.code).toBe('password-too-weak')
+    await change(oneTime, 'long enough now').expect(200)
+    await agent.get('/api/settings').expect(200)
+  })
+
+  it('answers malformed JSON and unknown addresses as problems', async () => {
+    const admin = await api.as('administrator')
+    const broken = await admin.agent
+      .post('/api/people')
+      .set('Content-Type', 'application/json')
+      .send('{broken')
+    expect(broken.status).toBe(400)
+    expect(broken.body.code).toBe('malformed-json')
+    expect((await admin.agent.get('/api/nowhere').expect(404)).body.code).toBe('unknown-route')
+    await admin.agent.get('/api/health').expect(200)
+    await admin.agent.get('/api/ready').expect(200)
+  })
+})

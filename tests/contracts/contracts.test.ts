@@ -1,0 +1,67 @@
+import { describe, expect, it } from 'vitest'
+import { z } from 'zod'
+import { successStatus } from '../../shared/contracts/contract.ts'
+import { allContracts } from '../../shared/contracts/index.ts'
+import { problemStatus } from '../../shared/contracts/problems.ts'
+import { actions } from '../../shared/domain/permissions/table.ts'
+import { problemTitles } from '../../shared/messages/problems.ts'
+import { openApiDocument } from '../../server/platform/http/openapi.ts'
+
+type Schema = { description?: string; properties?: Record<string, Schema>; items?: Schema; anyOf?: Schema[] }
+
+/** Places in a schema that say nothing about what they mean. */
+function undescribed(schema: Schema, at: string): string[] {
+  return Object.entries(schema.properties ?? {}).flatMap(([name, property]) => {
+    const here = `${at}.${name}`
+    const inside = [property, property.items, ...(property.anyOf ?? [])].flatMap((s) =>
+      s ? undescribed(s, here) : [],
+    )
+    return property.description ? inside : [here, ...inside]
+  })
+}
+
+describe('contracts', () => {
+  it('have ids and addresses of their own', () => {
+    const ids = allContracts.map((one) => one.id)
+    const addresses = allContracts.map((one) => `${one.method} ${one.path.replace(/:\w+/g, ':')}`)
+    expect(new Set(ids).size).toBe(ids.length)
+    expect(new Set(addresses).size).toBe(addresses.length)
+  })
+
+  it.each(allContracts.map((one) => [one.id, one] as const))('%s says all that it has to', (_id, of) => {
+    expect(of.summary.length).toBeGreaterThan(5)
+    expect(['public', 'signed-in', ...actions]).toContain(of.action)
+    expect(Object.keys(of.reply)).toHaveLength(1)
+    expect(successStatus(of)).toBeGreaterThanOrEqual(200)
+    for (const code of of.problems) expect(Object.keys(problemStatus)).toContain(code)
+    if (of.method === 'post' && of.action !== 'public' && of.id !== 'signOut' && of.id !== 'changePassword')
+      expect(of.idempotent, 'a writing contract says how a retry is recognised').toBeDefined()
+    for (const schema of [of.params, of.query, of.body, ...Object.values(of.reply)]) {
+      if (!schema) continue
+      const json = z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any' }) as Schema
+      expect(undescribed(json, of.id)).toEqual([])
+    }
+  })
+
+  it('answer unknown fields with an error, not with silence', () => {
+    for (const of of allContracts) {
+      if (!(of.body instanceof z.ZodObject)) continue
+      const parsed = of.body.safeParse({ surprise: 1 })
+      const keys =
+        parsed.error?.issues.flatMap((issue) => (issue.code === 'unrecognized_keys' ? issue.keys : [])) ?? []
+      expect(keys, of.id).toContain('surprise')
+    }
+  })
+
+  it('give every problem a title', () => {
+    expect(Object.keys(problemTitles).sort()).toEqual(Object.keys(problemStatus).sort())
+  })
+
+  it('make an OpenAPI 3.1 document with every operation', () => {
+    const document = openApiDocument() as { openapi: string; paths: Record<string, Record<string, unknown>> }
+    expect(document.openapi).toBe('3.1.0')
+    const operations = Object.values(document.paths).flatMap((path) => Object.values(path))
+    expect(operations).toHaveLength(allContracts.length)
+    expect(JSON.stringify(document)).not.toContain('$schema')
+  })
+})

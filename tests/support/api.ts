@@ -1,0 +1,113 @@
+import type { Express } from 'express'
+import { randomUUID } from 'node:crypto'
+import request from 'supertest'
+import { createApp } from '../../server/app.ts'
+import { compose } from '../../server/composition.ts'
+import type { Composition } from '../../server/composition.ts'
+import { entities } from '../../server/entities.ts'
+import { settableClock } from '../../server/platform/clock.ts'
+import { connectRuntime } from '../../server/platform/database/data-source.ts'
+import { installation } from '../../server/platform/http/request-context.ts'
+import { createLog } from '../../server/platform/log.ts'
+import type { Role } from '../../shared/domain/permissions/roles.ts'
+import type { SettingKey } from '../../shared/domain/settings/settings.ts'
+import { cloneDatabase } from './database.ts'
+
+export const password = 'chart-paper-7'
+export const testDay = new Date('2026-12-01T18:20:00Z')
+
+export interface TestPerson {
+  id: string
+  email: string
+  printedName: string
+  agent: ReturnType<typeof request.agent>
+}
+
+export interface TestApi {
+  app: Express
+  composition: Composition
+  ownerUrl: string
+  clock: ReturnType<typeof settableClock>
+  /** A request of nobody. */
+  anonymous(): ReturnType<typeof request>
+  /** The one person who holds just this role, signed in. The veterinarian has a valid licence. */
+  as(role: Role): Promise<TestPerson>
+  /** Another person, signed in. */
+  person(given: { email: string; printedName: string; roles: Role[] }): Promise<TestPerson>
+  setSetting(key: SettingKey, value: string): Promise<void>
+  nextId(): string
+  stop(): Promise<void>
+}
+
+export const newKey = () => randomUUID()
+const background = { actor: installation, requestId: 'test' }
+
+/** The whole server on a database of its own, as the runtime role, on a fixed day, with one person a role. */
+export async function startApi(): Promise<TestApi> {
+  const database = await cloneDatabase()
+  const dataSource = await connectRuntime(database.runtimeUrl, entities, 6)
+  const clock = settableClock(testDay)
+  const composition = compose({ dataSource, clock, log: createLog('silent'), demo: false })
+  const { app, close } = createApp({
+    config: { sessionSecret: 'x'.repeat(40), publicUrl: null, mode: 'test' },
+    composition,
+  })
+  const { people, facility, parts } = composition
+  const nextId = () => parts.ids.next()
+
+  async function setSetting(key: SettingKey, value: string): Promise<void> {
+    const id = nextId()
+    await facility.service.proposeSetting(background, key, { id, value })
+    await facility.service.confirmSetting(background, key, id)
+  }
+  await setSetting('facility.name', 'Harrow Point Sea Hall')
+  await setSetting('facility.zone', 'America/Halifax')
+  await setSetting('facility.jurisdictions', 'Norrell Sound')
+
+  async function person(given: { email: string; printedName: string; roles: Role[] }): Promise<TestPerson> {
+    const id = nextId()
+    await people.service.enterPerson(background, { id, ...given, password })
+    const agent = request.agent(app)
+    const reply = await agent.post('/api/sign-in').send({ email: given.email, password })
+    if (reply.status !== 200) throw new Error(`sign-in of ${given.email} answered ${String(reply.status)}`)
+    return { id, email: given.email, printedName: given.printedName, agent }
+  }
+
+  const byRole = new Map<Role, Promise<TestPerson>>()
+  async function enterRole(role: Role): Promise<TestPerson> {
+    const made = await person({
+      email: `${role}@harrow-point.example`,
+      printedName: `Test ${role}`,
+      roles: [role],
+    })
+    if (role === 'veterinarian')
+      await people.service.enterLicence(background, made.id, {
+        id: nextId(),
+        jurisdiction: 'Norrell Sound',
+        number: 'VL-20417',
+        validFrom: '2024-01-01',
+        validUntil: '2027-09-30',
+      })
+    return made
+  }
+
+  return {
+    app,
+    composition,
+    ownerUrl: database.ownerUrl,
+    clock,
+    anonymous: () => request(app),
+    as(role) {
+      const known = byRole.get(role) ?? enterRole(role)
+      byRole.set(role, known)
+      return known
+    },
+    person,
+    setSetting,
+    nextId,
+    async stop() {
+      close()
+      await dataSource.destroy()
+    },
+  }
+}
