@@ -3,19 +3,21 @@ import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.
 import { roles } from '../../../shared/domain/permissions/roles.ts'
 import { actions, permissions } from '../../../shared/domain/permissions/table.ts'
 
-/** The table as people read it; the same rows stand in docs/domain.md. */
+/** The table as people read it, kept in docs/. */
 function asMarkdown(): string {
   const head = `| action | ${roles.join(' | ')} |`
   const line = `| --- |${roles.map(() => ' --- |').join('')}`
   const rows = actions.map(
     (action) => `| ${action} | ${roles.map((role) => permissions[action][role]).join(' | ')} |`,
   )
-  return [head, line, ...rows].join('\n')
+  const title =
+    '# Who may do what\n\nMade from `shared/domain/permissions/table.ts` by its test; a word in a cell is a condition explained there.\n'
+  return [title, head, line, ...rows, ''].join('\n')
 }
 
 describe('the permission table', () => {
-  it('is what was agreed', () => {
-    expect(asMarkdown()).toMatchSnapshot()
+  it('is what was agreed, and what docs/permissions.md says', async () => {
+    await expect(asMarkdown()).toMatchFileSnapshot('../../../docs/permissions.md')
   })
 
   it('adds up the rights of several roles', () => {
