@@ -1,11 +1,13 @@
 import { ConfigError, readConfig } from './config.ts'
+import { demoAccountLines } from './demo/seed-demo.ts'
 import { systemClock } from './platform/clock.ts'
 import { startServer } from './start-server.ts'
 
 async function main(): Promise<void> {
   const config = readConfig(process.env)
   const server = await startServer(config, systemClock)
-  process.stdout.write(`\nPratique is ready at ${server.url}\n`)
+  const lines = [`Pratique is ready at ${server.url}`, ...(config.demo ? demoAccountLines() : [])]
+  process.stdout.write(`\n${lines.join('\n')}\n`)
 
   let stopping = false
   const stop = () => {

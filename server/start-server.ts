@@ -7,6 +7,7 @@ import type { Config } from './config.ts'
 import { entities } from './entities.ts'
 import { builtPages, developmentPages } from './pages.ts'
 import type { Pages } from './pages.ts'
+import { seedDemo } from './demo/seed-demo.ts'
 import type { Clock } from './platform/clock.ts'
 import { connectRuntime } from './platform/database/data-source.ts'
 import { prepareDatabase, runtimeUrlOf } from './platform/database/prepare-database.ts'
@@ -27,6 +28,7 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
     runtimeUrlOf(config.ownerDatabaseUrl, config.runtimePassword),
     entities,
   )
+  if (config.demo) await seedDemo({ dataSource, clock, log })
   const composition = compose({ dataSource, clock, log, demo: config.demo })
 
   const server = createServer()

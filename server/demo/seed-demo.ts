@@ -1,0 +1,42 @@
+import type { DataSource } from 'typeorm'
+import { compose } from '../composition.ts'
+import type { Clock } from '../platform/clock.ts'
+import { settableClock } from '../platform/clock.ts'
+import type { Log } from '../platform/log.ts'
+import { demoPassword, demoPeople, seedPeople } from './people.ts'
+
+const seedLock = 4400_0003
+const historyDays = 90
+
+/**
+ * Loads the practice scenario once, into an empty database only, through the same services that people use, on a
+ * clock that walks from 90 days ago to now.
+ */
+export async function seedDemo(outside: {
+  dataSource: DataSource
+  clock: Clock
+  log: Log
+}): Promise<boolean> {
+  const runner = outside.dataSource.createQueryRunner()
+  await runner.query('SELECT pg_advisory_lock($1)', [seedLock])
+  try {
+    const now = outside.clock.now()
+    const clock = settableClock(new Date(now.getTime() - historyDays * 86_400_000))
+    const composition = compose({ ...outside, clock, demo: true })
+    if ((await composition.people.countPeople()) > 0) return false
+    await seedPeople(composition)
+    return true
+  } finally {
+    await runner.query('SELECT pg_advisory_unlock($1)', [seedLock])
+    await runner.release()
+  }
+}
+
+/** The lines that tell a newcomer how to sign in. */
+export function demoAccountLines(): string[] {
+  const rows = Object.entries(demoPeople).map(
+    ([key, person]) =>
+      `  ${`${key}@harrow-point.example`.padEnd(34)} ${person.name}, ${person.roles.join(', ')}`,
+  )
+  return [`Practice accounts, password ${demoPassword}:`, ...rows]
+}

@@ -1,0 +1,26 @@
+/**
+ * What kind each table is; a test compares this list with the rights that the runtime role really has.
+ *
+ * - draft       mutable, saved by version
+ * - sealed      signed; only superseded by a new version row
+ * - ledger      append-only; a correction is a new entry
+ * - projection  derived; rebuilt in the transaction that changes its source
+ * - plumbing    sessions, counters and the like, which hold no facts
+ */
+export type TableKind = 'draft' | 'sealed' | 'ledger' | 'projection' | 'plumbing'
+
+export const tableKinds: Record<string, TableKind> = {
+  migrations: 'ledger',
+  session: 'plumbing',
+  rate_limits: 'plumbing',
+  command_keys: 'plumbing',
+  counters: 'plumbing',
+  audit_entries: 'ledger',
+  people: 'draft',
+  person_roles: 'draft',
+  licences: 'ledger',
+  licence_voids: 'ledger',
+  sign_in_tries: 'ledger',
+  setting_versions: 'ledger',
+  setting_confirmations: 'ledger',
+}
