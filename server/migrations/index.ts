@@ -1,4 +1,5 @@
 import { Foundation1764600000001 } from './0001-foundation.ts'
+import { Water1764600000002 } from './0002-water.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
-export const migrations = [Foundation1764600000001]
+export const migrations = [Foundation1764600000001, Water1764600000002]
