@@ -1,0 +1,61 @@
+import { ok, refuse, type Result } from '../result.ts'
+import { type FacilityDate, isFacilityDate } from '../time/instant.ts'
+
+/** A permit as far as its use-up is judged. */
+export interface PermitTerms {
+  validFrom: FacilityDate
+  validUntil: FacilityDate
+  /** Whole animals it allows in all; null: no number is stated on it. */
+  quantityAllowed: number | null
+  /** Taxa it is restricted to; empty: none is named on it. */
+  taxonIds: readonly string[]
+  voided: boolean
+}
+
+/** What is wrong with taking animals under a permit. */
+export type PermitMark = 'over-quantity' | 'not-yet-valid' | 'expired' | 'other-taxon' | 'voided'
+
+export interface PermitJudgement {
+  /** Whole animals left before this use; null when the permit states no number. */
+  remainingBefore: number | null
+  /** Whole animals left afterwards, negative when more was taken than allowed; null as above. */
+  remainingAfter: number | null
+  /** How many of this use the permit does not cover. */
+  excess: number
+  /** Empty: the permit covers the use. */
+  marks: PermitMark[]
+}
+
+/**
+ * Whether a permit covers a number of animals on a day.
+ *
+ * The judgement is the same before and after the event. What follows differs: about to happen, any mark refuses it;
+ * already happened, it is kept with its marks and stays open until the registrar has explained it.
+ *
+ * @param terms    the permit
+ * @param usedSoFar whole animals already taken under it, uses of voided transactions left out, 0 or more
+ * @param use      day of the event (the last possible day, where only month or year is known), taxon, whole animals > 0
+ * @refuses quantity-not-whole | not-a-date
+ * @source common practice of permit keeping, no source
+ */
+export function judgePermitUse(
+  terms: PermitTerms,
+  usedSoFar: number,
+  use: { on: FacilityDate; taxonId: string; quantity: number },
+): Result<PermitJudgement, 'quantity-not-whole' | 'not-a-date'> {
+  if (!Number.isSafeInteger(use.quantity) || use.quantity <= 0)
+    return refuse('quantity-not-whole', 'quantity')
+  if (!isFacilityDate(use.on)) return refuse('not-a-date', 'on')
+  const { quantityAllowed } = terms
+  const remainingBefore = quantityAllowed === null ? null : quantityAllowed - usedSoFar
+  const remainingAfter = remainingBefore === null ? null : remainingBefore - use.quantity
+  const covered = remainingBefore === null ? use.quantity : Math.max(0, remainingBefore)
+  const excess = Math.max(0, use.quantity - covered)
+  const marks: PermitMark[] = []
+  if (terms.voided) marks.push('voided')
+  if (use.on < terms.validFrom) marks.push('not-yet-valid')
+  if (use.on > terms.validUntil) marks.push('expired')
+  if (terms.taxonIds.length > 0 && !terms.taxonIds.includes(use.taxonId)) marks.push('other-taxon')
+  if (excess > 0) marks.push('over-quantity')
+  return ok({ remainingBefore, remainingAfter, excess, marks })
+}
