@@ -55,8 +55,9 @@ export function createPdfPool(options: PdfPoolOptions = {}): PdfPool {
   let closing: { promise: Promise<void>; done(): void } | undefined
   let nextId = 1
 
+  // The server's own switches (a loader, a debugger) are not handed on: the worker loads what it needs itself.
   function start(): Thread {
-    const thread: Thread = { worker: new Worker(workerFile) }
+    const thread: Thread = { worker: new Worker(workerFile, { execArgv: [] }) }
     thread.worker.on('message', (answer: PdfAnswer) => finish(thread, answer))
     thread.worker.on('error', (error) => lose(thread, error))
     thread.worker.on('exit', (code) => lose(thread, new Error(`PDF thread ended with code ${code}`)))

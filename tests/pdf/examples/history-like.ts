@@ -114,9 +114,19 @@ export function historyLike(events = 120, changes: Partial<PdfDocumentModel> = {
             ? 'Counted by Zoé Ångström-Łukasiewicz, lagoon side'
             : `Entry ${i + 1}, moved within the wing`,
           i % 3 === 0 ? '+ 2' : '− 1',
-          `${200 + i}`,
+          `${countAfter(i + 1)}`,
         ]),
-        ...(events > 0 ? { totals: ['', '', 'Sum of the ledger', '+ 40', '319'] } : {}),
+        ...(events > 0
+          ? {
+              totals: [
+                '',
+                '',
+                'Sum of the ledger',
+                signed(countAfter(events) - 199),
+                `${countAfter(events)}`,
+              ],
+            }
+          : {}),
         emptyText: 'No entries in this period.',
       },
       {
@@ -128,6 +138,16 @@ export function historyLike(events = 120, changes: Partial<PdfDocumentModel> = {
     ],
     ...changes,
   }
+}
+
+/** The ledger opens at 199; every third entry adds 2, the others take 1 away. */
+function countAfter(entries: number): number {
+  const additions = Math.ceil(entries / 3)
+  return 199 + 2 * additions - (entries - additions)
+}
+
+function signed(change: number): string {
+  return change < 0 ? `−\u00a0${-change}` : `+\u00a0${change}`
 }
 
 /** Two legs and a restart, in the geometry of the board's rows. */
