@@ -64,7 +64,13 @@ export class Canvas {
   }
 
   rule(x1: number, y1: number, x2: number, y2: number, stroke: Stroke): void {
-    this.path([[x1, y1], [x2, y2]], { stroke }) // prettier-ignore
+    this.path(
+      [
+        [x1, y1],
+        [x2, y2],
+      ],
+      { stroke },
+    )
   }
 
   box(x: number, top: number, width: number, height: number, look: { stroke?: Stroke; fill?: Colour }): void {

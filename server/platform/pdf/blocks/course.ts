@@ -10,7 +10,18 @@ const fixRoom = px(34)
 export function measureCourse(block: CourseBlock, measure: Measure): Piece[] {
   const { face, width } = measure
   if (block.stops.length === 0)
-    return [rowPiece([{ box: textBox(face, block.emptyText, width, { size: type.body, tone: 'second', block: 'course' }), x: 0 }], { block: 'course', before: px(4) }, measure.pageRoom)] // prettier-ignore
+    return [
+      rowPiece(
+        [
+          {
+            box: textBox(face, block.emptyText, width, { size: type.body, tone: 'second', block: 'course' }),
+            x: 0,
+          },
+        ],
+        { block: 'course', before: px(4) },
+        measure.pageRoom,
+      ),
+    ]
   const name = (stop: CourseStop) => `course "${stop.when}, ${stop.title}"`
   const dates = block.stops.map((stop) =>
     textBox(face, stop.when, width * 0.24, { size: type.body, block: name(stop) }),

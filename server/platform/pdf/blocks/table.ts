@@ -41,7 +41,11 @@ export function measureTable(block: TableBlock, measure: Measure): Piece[] {
   const boxed = block.boxed ?? block.rows.some((row) => row.some(isPen))
   const layout = layOut(block, name, measure, boxed)
   const head = rowPiece(
-    rowBoxes(layout, block.columns.map((column) => column.head), { size: type.label, tone: 'second' }), // prettier-ignore
+    rowBoxes(
+      layout,
+      block.columns.map((column) => column.head),
+      { size: type.label, tone: 'second' },
+    ),
     {
       block: name,
       before: 0,
@@ -64,7 +68,16 @@ export function measureTable(block: TableBlock, measure: Measure): Piece[] {
   if (body.length === 0)
     body.push(
       rowPiece(
-        [{ box: textBox(measure.face, block.emptyText, measure.width - 2 * layout.pad, { size: layout.size, tone: 'second', block: name }), x: layout.pad }], // prettier-ignore
+        [
+          {
+            box: textBox(measure.face, block.emptyText, measure.width - 2 * layout.pad, {
+              size: layout.size,
+              tone: 'second',
+              block: name,
+            }),
+            x: layout.pad,
+          },
+        ],
         { ...rowLook({ ...layout, boxed: false }, [], head, Boolean(block.totals)) },
         measure.pageRoom,
       ),

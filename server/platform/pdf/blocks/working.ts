@@ -16,8 +16,18 @@ export function measureWorking(block: WorkingBlock, measure: Measure): Piece[] {
   })
   const widest = (share: number, texts: string[]): number =>
     Math.min(width * share, Math.max(0, ...texts.map((text, i) => leastWidths(face, text, options(i)).line)))
-  const resultWidth = widest(0.5, block.lines.map((line) => line.result)) + 0.1 // prettier-ignore
-  const whatWidth = Math.max(px(66), widest(0.36, block.lines.map((line) => line.what))) // prettier-ignore
+  const resultWidth =
+    widest(
+      0.5,
+      block.lines.map((line) => line.result),
+    ) + 0.1
+  const whatWidth = Math.max(
+    px(66),
+    widest(
+      0.36,
+      block.lines.map((line) => line.what),
+    ),
+  )
   const formulaWidth = width - resultWidth - whatWidth - 2 * gap
   return block.lines.map((line, i) => {
     const formula = textBox(face, line.formula, formulaWidth, {
