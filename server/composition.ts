@@ -1,12 +1,15 @@
+import path from 'node:path'
 import type { DataSource } from 'typeorm'
 import { createAudit } from './features/audit/index.ts'
 import { createFacility } from './features/facility/index.ts'
 import { createPeople } from './features/people/index.ts'
+import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
 import type { Clock } from './platform/clock.ts'
 import { createTransactions } from './platform/database/transactions.ts'
 import { createIds } from './platform/ids.ts'
 import type { Log } from './platform/log.ts'
+import { createSigner } from './platform/signatures/signer.ts'
 import { createLockout } from './platform/sign-in/lockout.ts'
 
 export interface Outside {
@@ -15,6 +18,8 @@ export interface Outside {
   log: Log
   /** This installation shows the practice scenario. */
   demo: boolean
+  /** Folder of keys and attachments; belongs into the backup. */
+  dataFolder: string
 }
 
 /** The one place where features are made, in an order in which each asks only those made before it. */
@@ -31,16 +36,20 @@ export function compose(outside: Outside) {
   const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
   const lockout = createLockout(parts)
   const audit = createAudit(parts)
+  const signer = createSigner(path.join(outside.dataFolder, 'keys'))
+  const signing = createSigning({ ...parts, signer, lockout, facility: facility.service, people })
   return {
     parts,
     authenticator,
     facility,
     people,
+    signing,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
       ...facility.routes,
       ...audit.routes,
+      ...signing.routes,
     ],
   }
 }

@@ -1,5 +1,6 @@
 import { facilityEntities } from './features/facility/index.ts'
 import { peopleEntities } from './features/people/index.ts'
+import { signingEntities } from './features/signing/index.ts'
 
 /** Every mapped table; each feature names its own. */
-export const entities = [...facilityEntities, ...peopleEntities]
+export const entities = [...facilityEntities, ...peopleEntities, ...signingEntities]

@@ -28,8 +28,8 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
     runtimeUrlOf(config.ownerDatabaseUrl, config.runtimePassword),
     entities,
   )
-  if (config.demo) await seedDemo({ dataSource, clock, log })
-  const composition = compose({ dataSource, clock, log, demo: config.demo })
+  if (config.demo) await seedDemo({ dataSource, clock, log, dataFolder: config.dataFolder })
+  const composition = compose({ dataSource, clock, log, demo: config.demo, dataFolder: config.dataFolder })
 
   const server = createServer()
   const pages: Pages =

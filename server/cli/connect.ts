@@ -16,7 +16,9 @@ export async function withComposition(task: (composition: Composition) => Promis
     const dataSource = await connectRuntime(url, entities, 3)
     try {
       const log = createLog(config.logLevel)
-      process.exitCode = await task(compose({ dataSource, clock: systemClock, log, demo: config.demo }))
+      process.exitCode = await task(
+        compose({ dataSource, clock: systemClock, log, demo: config.demo, dataFolder: config.dataFolder }),
+      )
     } finally {
       await dataSource.destroy()
     }

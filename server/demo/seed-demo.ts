@@ -16,6 +16,7 @@ export async function seedDemo(outside: {
   dataSource: DataSource
   clock: Clock
   log: Log
+  dataFolder: string
 }): Promise<boolean> {
   const runner = outside.dataSource.createQueryRunner()
   await runner.query('SELECT pg_advisory_lock($1)', [seedLock])

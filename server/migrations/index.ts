@@ -1,5 +1,11 @@
 import { Foundation1764600000001 } from './0001-foundation.ts'
 import { Water1764600000002 } from './0002-water.ts'
+import { Signing1764600000010 } from './0010-signing.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
-export const migrations = [Foundation1764600000001, Water1764600000002]
+export const migrations = [
+  // one a line
+  Foundation1764600000001,
+  Water1764600000002,
+  Signing1764600000010,
+]

@@ -2,10 +2,11 @@ import type { Contract } from './contract.ts'
 import * as audit from './audit.contract.ts'
 import * as facility from './facility.contract.ts'
 import * as people from './people.contract.ts'
+import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
 
 /** Modules that hold contracts; a new feature adds its own here. */
-const modules = [signIn, people, facility, audit]
+const modules = [signIn, people, facility, audit, signing]
 
 const isContract = (value: unknown): value is Contract =>
   typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'reply' in value

@@ -1,5 +1,8 @@
 import type { Express } from 'express'
 import { randomUUID } from 'node:crypto'
+import { mkdtemp, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import path from 'node:path'
 import request from 'supertest'
 import { createApp } from '../../server/app.ts'
 import { compose } from '../../server/composition.ts'
@@ -47,7 +50,8 @@ export async function startApi(): Promise<TestApi> {
   const database = await cloneDatabase()
   const dataSource = await connectRuntime(database.runtimeUrl, entities, 6)
   const clock = settableClock(testDay)
-  const composition = compose({ dataSource, clock, log: createLog('silent'), demo: false })
+  const dataFolder = await mkdtemp(path.join(tmpdir(), 'pratique-test-'))
+  const composition = compose({ dataSource, clock, log: createLog('silent'), demo: false, dataFolder })
   const { app, close } = createApp({
     config: { sessionSecret: 'x'.repeat(40), publicUrl: null, mode: 'test' },
     composition,
@@ -108,6 +112,7 @@ export async function startApi(): Promise<TestApi> {
     async stop() {
       close()
       await dataSource.destroy()
+      await rm(dataFolder, { recursive: true, force: true })
     },
   }
 }

@@ -42,6 +42,7 @@ export function createPeople(parts: Parts & { facility: FacilityService }) {
     queries,
     readPreferences: async (id: string) => (await readPerson(dataSource, id))?.preferences ?? {},
     readCredentials: (email: string) => readCredentials(dataSource, email),
+    readPasswordHash: (id: string) => readPasswordHash(dataSource, id),
     countPeople: () => countPeople(dataSource),
     routes: peopleRoutes(service, queries),
   }

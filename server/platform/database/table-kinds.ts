@@ -41,4 +41,5 @@ export const tableKinds: Record<string, TableKind> = {
   volume_determination_valves: 'sealed',
   volume_confirmations: 'ledger',
   water_voids: 'ledger',
+  signed_texts: 'sealed',
 }

@@ -1,0 +1,26 @@
+import { getSigningKey } from '../../../shared/contracts/signing.contract.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Parts } from '../../platform/parts.ts'
+import type { Lockout } from '../../platform/sign-in/lockout.ts'
+import type { Signer } from '../../platform/signatures/signer.ts'
+import type { FacilityService } from '../facility/index.ts'
+import type { People } from '../people/index.ts'
+import { SignedText } from './signed-text.entity.ts'
+import { readSignedText } from './signing.reads.ts'
+import { createSigningService } from './signing.service.ts'
+
+export type { Signatory, SigningService } from './signing.service.ts'
+export const signingEntities = [SignedText]
+
+export function createSigning(
+  parts: Parts & { signer: Signer; lockout: Lockout; facility: FacilityService; people: People },
+) {
+  const service = createSigningService({
+    ...parts,
+    validLicence: (personId, at) => parts.people.questions.validLicence(personId, at),
+    readPasswordHash: (personId) => parts.people.readPasswordHash(personId),
+    readSignedText: (id, tx) => readSignedText(tx?.manager ?? parts.dataSource, id),
+  })
+  const { keyId, publicKeyPem } = parts.signer
+  return { service, routes: [route(getSigningKey, async () => ({ keyId, publicKeyPem }))] }
+}
