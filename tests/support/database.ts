@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto'
 import pg from 'pg'
 import { inject } from 'vitest'
+import { runtimeUrlOf } from '../../server/platform/database/prepare-database.ts'
 
 /** The addresses of one database: as its owner, and as the role the server runs under. */
 export interface ClonedDatabase {
@@ -26,8 +27,5 @@ export async function cloneDatabase(): Promise<ClonedDatabase> {
   }
   const owner = new URL(pgOwnerUrl)
   owner.pathname = `/${name}`
-  const runtime = new URL(owner)
-  runtime.username = 'pratique_app'
-  runtime.password = inject('runtimePassword')
-  return { ownerUrl: owner.href, runtimeUrl: runtime.href, name }
+  return { ownerUrl: owner.href, runtimeUrl: runtimeUrlOf(owner.href, inject('runtimePassword')), name }
 }

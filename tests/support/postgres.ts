@@ -1,8 +1,8 @@
 import { createHash } from 'node:crypto'
-import path from 'node:path'
 import pg from 'pg'
 import type { TestProject } from 'vitest/node'
 import { Cluster } from '../../server/cli/postgres.mjs'
+import { prepareDatabase } from '../../server/platform/database/prepare-database.ts'
 
 declare module 'vitest' {
   interface ProvidedContext {
@@ -12,8 +12,6 @@ declare module 'vitest' {
     runtimePassword: string
   }
 }
-
-type PrepareDatabase = (ownerUrl: string, runtimePassword: string) => Promise<void>
 
 /**
  * Gives a project of tests a PostgreSQL cluster that holds the migrated database `tmpl`. Two projects name this
@@ -48,8 +46,6 @@ async function makeTemplate(pgOwnerUrl: string, runtimePassword: string): Promis
     if (made.rowCount) return
     await client.query('DROP DATABASE IF EXISTS tmpl_unfinished WITH (FORCE)')
     await client.query('CREATE DATABASE tmpl_unfinished')
-    const file = path.resolve(import.meta.dirname, '../../server/platform/database/prepare-database.ts')
-    const { prepareDatabase } = (await import(file)) as { prepareDatabase: PrepareDatabase }
     await prepareDatabase(onDatabase(pgOwnerUrl, 'tmpl_unfinished'), runtimePassword)
     await client.query('ALTER DATABASE tmpl_unfinished RENAME TO tmpl')
   } finally {
