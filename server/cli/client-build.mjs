@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto'
-import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
+import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, statSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { packageProgram } from './project.mjs'
 import { Advice, runCommand, tail } from './run-command.mjs'
@@ -54,8 +54,7 @@ function hashOf(root) {
 
 /** @param {string} at @returns {string[]} */
 function filesIn(at) {
-  const isFolder = existsSync(path.join(at, '.'))
-  if (!isFolder) return [at]
+  if (!statSync(at).isDirectory()) return [at]
   return readdirSync(at, { recursive: true, withFileTypes: true })
     .filter((entry) => entry.isFile() && !entry.name.endsWith('.tsbuildinfo'))
     .map((entry) => path.join(entry.parentPath, entry.name))
