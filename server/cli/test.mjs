@@ -43,7 +43,15 @@ async function runAll(vitestArgs) {
   ])
   const env = { ...process.env, NODE_ENV: '' }
   // the settings of a person's own installation are no part of a test
-  for (const name of ['DATABASE_URL', 'SESSION_SECRET', 'SMTP_URL', 'PUBLIC_URL', 'PORT', 'HOST', 'LOG_LEVEL'])
+  for (const name of [
+    'DATABASE_URL',
+    'SESSION_SECRET',
+    'SMTP_URL',
+    'PUBLIC_URL',
+    'PORT',
+    'HOST',
+    'LOG_LEVEL',
+  ])
     delete env[name]
   for (const name of Object.keys(env)) if (/^PRATIQUE_|^PG/.test(name) && name !== 'PG_BIN') delete env[name]
   const chromium = await provide('Chromium', () => ensureChromium(say))
