@@ -1,6 +1,7 @@
 import pg from 'pg'
 import { DataSource } from 'typeorm'
 import { migrations } from '../../migrations/index.ts'
+import { prepareJobs } from '../jobs/prepare-jobs.ts'
 
 export const runtimeRole = 'pratique_app'
 const prepareLock = 4400_0002
@@ -33,6 +34,7 @@ export async function prepareDatabase(ownerUrl: string, runtimePassword: string)
     )
     await guard.query(`ALTER DEFAULT PRIVILEGES IN SCHEMA public GRANT USAGE ON SEQUENCES TO ${runtimeRole}`)
     await migrate(ownerUrl)
+    await prepareJobs(ownerUrl, guard, runtimeRole)
     await guard.query(`REVOKE INSERT ON migrations FROM ${runtimeRole}`)
   } finally {
     await guard.end()
