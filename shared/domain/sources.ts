@@ -21,6 +21,11 @@ export const sources = {
     mark: 'C',
   },
   'iupac-weights': { citation: 'IUPAC abridged standard atomic weights', mark: 'C' },
+  'jcgm-100': {
+    citation:
+      'JCGM 100, Evaluation of measurement data: Guide to the expression of uncertainty in measurement, 5.1',
+    mark: 'M',
+  },
   'ismp-dose-designations': {
     citation:
       'Institute for Safe Medication Practices, list of error-prone abbreviations, symbols and dose designations',

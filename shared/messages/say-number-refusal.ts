@@ -1,15 +1,19 @@
 import type { Refusal } from '../domain/result.ts'
 import { isUnitCode } from '../domain/units/is-unit-code.ts'
-import type { QuantityRefusal } from '../domain/units/number-refusal.ts'
 import { unitOf } from '../domain/units/unit-of.ts'
+import type { VolumeRefusal } from '../domain/water/volume-refusal.ts'
 import { fieldExamples, numberFields } from './number-fields.ts'
 import { numberRefusals, type RefusalWords } from './number-refusals.ts'
 import { unitNames } from './units.ts'
+import { volumeRefusals } from './volume-refusals.ts'
 
 /** Every refusal that the engines of units, water and dose give. */
-export type NumberRefusalCode = QuantityRefusal
+export type NumberRefusalCode = VolumeRefusal
 
-const catalogue: Record<NumberRefusalCode, (p: RefusalWords) => string> = { ...numberRefusals }
+const catalogue: Record<NumberRefusalCode, (p: RefusalWords) => string> = {
+  ...numberRefusals,
+  ...volumeRefusals,
+}
 
 /**
  * A refused number in plain words that say what to do: "Type the depth of the water in metres, for example 0.68."

@@ -1,14 +1,7 @@
 import { unitOf } from '../units/unit-of.ts'
 import { unitTable, type UnitCode } from '../units/unit-table.ts'
 import { expressionUnit } from '../working/expression-unit.ts'
-import { decimalText } from './decimal.ts'
-import {
-  finiteDecimal,
-  groupThousands,
-  minusSign,
-  noBreakSpace,
-  withoutTrailingZeros,
-} from './number-text.ts'
+import { fixedPlaces, groupThousands, minusSign, noBreakSpace, withoutTrailingZeros } from './number-text.ts'
 
 const unitByName = new Map<string, UnitCode>()
 for (const code of Object.keys(unitTable) as UnitCode[]) {
@@ -18,21 +11,27 @@ for (const code of Object.keys(unitTable) as UnitCode[]) {
 
 const signs: Record<string, string> = { '*': '×', '/': '÷', '+': '+', '-': minusSign }
 const constants: Record<string, string> = { pi: '3.1416' }
-const functions: Record<string, string> = { acos: 'arccos' }
+const functions: Record<string, string> = { asin: 'arcsin' }
 const powers: Record<string, string> = { '^2': '²', '^3': '³' }
 const token =
   /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d)|(?<sign> [-+*/] )|(?<other>.)/gs
-const shownDigits = 6
+const enteredDigits = 6
+const shortenedDigits = 4
+/** A single quantity in brackets, which only the arithmetic needs: "÷ (2,217.6 L)". */
+const needlessBrackets = /\((\d[\d.]*(?:e[+-]?\d+)? [A-Za-z_]\w*(?:\/\w+)?)\)(?!\^)/g
 
 /**
  * The arithmetic of a working line as people write it: `pi / 4 * (0.057 m)^2 * 14.2 m to L` becomes
  * "0.7854 × (0.057 m)² × 14.2 m". Digits as entered stay; figures longer than six significant digits, which only an
- * earlier line can have given, are shortened.
+ * earlier line can have given, are shortened to four, with one decimal place at least, as that line shows them.
  *
  * @param expression the `expression` of a working line
  */
 export function formatExpression(expression: string): string {
-  const shown = expression.replace(/ to [^ ]+$/, '').replaceAll('pi / 4', '0.7854')
+  const shown = expression
+    .replace(/ to [^ ]+$/, '')
+    .replaceAll('pi / 4', '0.7854')
+    .replace(needlessBrackets, '$1')
   let text = ''
   for (const match of shown.matchAll(token)) {
     const { number, name, power, sign, other } = match.groups ?? {}
@@ -48,9 +47,10 @@ export function formatExpression(expression: string): string {
 
 function shownNumber(text: string): string {
   const significant = text.replace(/e.*$/, '').replace('.', '').replace(/^0+/, '').length
-  if (significant <= shownDigits && !text.includes('e')) return groupThousands(text)
-  const rounded = Number(text).toPrecision(shownDigits)
-  return groupThousands(withoutTrailingZeros(decimalText(finiteDecimal(rounded))))
+  if (significant <= enteredDigits && !text.includes('e')) return groupThousands(text)
+  const exponent = Number(Number(text).toExponential().split('e')[1])
+  const places = Math.max(1, shortenedDigits - 1 - exponent)
+  return groupThousands(withoutTrailingZeros(fixedPlaces(Number(text), places)))
 }
 
 function shownName(name: string): string {

@@ -5,7 +5,7 @@ import type { UnitCode } from '../units/unit-table.ts'
  * operator. Units that are absent cannot stand in an expression. The empty name is a plain number: percentages, and
  * turnovers per day.
  *
- * `gal` is mathjs's US gallon; `gal_imp` is not known to mathjs, so whoever evaluates defines it (4.54609 L).
+ * `gal` is mathjs's US gallon; `impgal` is not known to mathjs, so whoever evaluates defines it (4.54609 L).
  */
 const names: Partial<Record<UnitCode, string>> = {
   uL: 'uL',
@@ -13,7 +13,7 @@ const names: Partial<Record<UnitCode, string>> = {
   L: 'L',
   m3: 'm3',
   gal_us: 'gal',
-  gal_imp: 'gal_imp',
+  gal_imp: 'impgal',
   floz_us: 'floz',
   in3: 'cuin',
   ft3: 'cuft',

@@ -198,9 +198,9 @@ describe('working', () => {
     ['pi / 4 * (0.057 m)^2 * 14.2 m to L', '0.7854~× (0.057~m)²~× 14.2~m'],
     ['2217.6 L * 0.05 mg/L to mg', '2,217.6~L~× 0.05~mg/L'],
     ['110.88 mg / (63.546 / 249.685) to mg', '110.88~mg~÷ (63.546~÷ 249.685)'],
-    ['2217.6134567 L * 250 uL/L to mL', '2,217.61~L~× 250~µL/L'],
+    ['2217.6134567 L * 250 uL/L to mL', '2,217.6~L~× 250~µL/L'],
     ['1958.4 L - 41 L + 264 L to L', '1,958.4~L~\u2212 41~L~+ 264~L'],
-    ['25000 gal / (400 gal/minute) to minute', '25,000~US gal~÷ (400~US gal/min)'],
+    ['25000 gal / (400 gal/minute) to minute', '25,000~US gal~÷ 400~US gal/min'],
     ['pi * (0.5 m)^2 * 1e-7 m to L', '3.1416~× (0.5~m)²~× 0.0000001~m'],
   ])('%s is written %s', (expression, expected) => {
     expect(seen(formatExpression(expression))).toBe(expected)
