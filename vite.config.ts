@@ -16,7 +16,7 @@ export default defineConfig({
         test: {
           name: 'pure',
           environment: 'node',
-          include: files('domain', 'published-values', 'contracts', 'architecture', 'pdf'),
+          include: files('domain', 'published-values', 'contracts', 'architecture', 'pdf', 'platform'),
           testTimeout: 60_000,
         },
       },
