@@ -32,6 +32,40 @@ export const sources = {
     mark: 'V2',
   },
   'joint-commission-do-not-use': { citation: 'Joint Commission, official “do not use” list', mark: 'V2' },
+
+  'cfr-529-1030': { citation: '21 CFR 529.1030, formalin; read in the 2015 edition', mark: 'V' },
+  'cfr-529-1150': { citation: '21 CFR 529.1150, hydrogen peroxide; read in the 2015 edition', mark: 'V' },
+  'cfr-529-382': { citation: '21 CFR 529.382, chloramine-T; read current to April 2026', mark: 'V' },
+  'cfr-529-2503': {
+    citation: '21 CFR 529.2503, tricaine methanesulfonate; read in the 2015 edition',
+    mark: 'V',
+  },
+  'ufifas-vm77': { citation: 'UF/IFAS Extension VM-77, Francis-Floyd and Pouder: formalin', mark: 'V' },
+  'ufifas-vm86': { citation: 'UF/IFAS Extension VM-86, Francis-Floyd: salt', mark: 'V' },
+  'ufifas-fa008': {
+    citation: 'UF/IFAS Extension FA008, Watson and Yanong: copper in fresh water',
+    mark: 'V',
+  },
+  'ufifas-fa165': {
+    citation: 'UF/IFAS Extension FA165, Yanong: copper in marine systems; figures as restated elsewhere',
+    mark: 'V2',
+  },
+  'ufifas-fa157': {
+    citation: 'UF/IFAS Extension FA157, Yanong: hydrogen peroxide; marine figure',
+    mark: 'M',
+  },
+  'thomas-2016': {
+    citation: 'Thomas, Dawson, Ellis and Stamper 2016, PeerJ 4:e1857: praziquantel',
+    mark: 'V',
+  },
+  'forwood-2013': {
+    citation: 'Forwood et al. 2013, Journal of Fish Diseases, doi 10.1111/jfd.12089',
+    mark: 'V',
+  },
+  'noga-2010': {
+    citation: 'Noga 2010, Fish Disease: Diagnosis and Treatment, 2nd edition, as quoted',
+    mark: 'V2',
+  },
 } as const satisfies Record<string, Source>
 
 export type SourceKey = keyof typeof sources

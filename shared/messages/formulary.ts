@@ -1,0 +1,52 @@
+import type { AgentCode } from '../domain/formulary/agent.ts'
+import type { DoseUse, WaterKind } from '../domain/formulary/dose-line.ts'
+import type { ConcentrationBasis } from '../domain/units/basis.ts'
+import { defineMessages } from './define-messages.ts'
+
+/** Established names, whole and in lower case; never an abbreviation. */
+export const agentNames = defineMessages({
+  formalin: 'formaldehyde solution 37 % (formalin)',
+  'copper-sulfate': 'copper sulfate pentahydrate',
+  'chelated-copper': 'chelated copper',
+  chloroquine: 'chloroquine diphosphate',
+  praziquantel: 'praziquantel',
+  'hydrogen-peroxide': 'hydrogen peroxide',
+  'chloramine-t': 'chloramine-T trihydrate',
+  tricaine: 'tricaine methanesulfonate',
+  'sodium-chloride': 'sodium chloride',
+  'potassium-permanganate': 'potassium permanganate',
+  'methylene-blue': 'methylene blue',
+  metronidazole: 'metronidazole',
+  oxytetracycline: 'oxytetracycline hydrochloride',
+  fenbendazole: 'fenbendazole',
+} satisfies Record<AgentCode, string>)
+
+export const doseUses = defineMessages({
+  'ectoparasites-bath': 'external parasites, bath',
+  'ectoparasites-indefinite': 'external parasites, left in the water',
+  'ectoparasites-marine-course': 'external parasites, course in sea water',
+  'ectoparasites-fresh-single': 'external parasites, single dose in fresh water',
+  'flukes-prolonged': 'monogeneans, left in the water',
+  'flukes-short': 'monogeneans, 48 h',
+  'external-bacteria': 'external bacteria, bath',
+  'salt-bath': 'salt bath for hours',
+  'salt-dip': 'salt dip',
+  sedation: 'sedation and anaesthesia',
+  'protozoa-course': 'protozoa, course in sea water',
+} satisfies Record<DoseUse, string>)
+
+export const waterKinds = defineMessages({
+  fresh: 'fresh water',
+  marine: 'sea water',
+  both: 'fresh and sea water',
+} satisfies Record<WaterKind, string>)
+
+/** What a concentration is a concentration of, as it stands beside the figure. */
+export const basisNames = defineMessages({
+  active: 'as active drug',
+  product: 'as product',
+  salt: 'as the salt',
+  base: 'as the base',
+  free: 'as free ion',
+  total: 'free and bound together',
+} satisfies Record<ConcentrationBasis, string>)
