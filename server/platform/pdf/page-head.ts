@@ -1,5 +1,6 @@
 import type { PdfDocumentModel, RichText } from '../../../shared/domain/documents/pdf-document-model.ts'
 import { drawBrandMark } from './brand-mark.ts'
+import { leastWidths } from './break-lines.ts'
 import type { Canvas } from './canvas.ts'
 import { drawFlag } from './flags.ts'
 import type { PageGeometry } from './page-geometry.ts'
@@ -38,12 +39,7 @@ export function cartouche(model: PdfDocumentModel, face: Typeface, geometry: Pag
   const subjectText = subjectWidth - px(26) - flagWidth
   const subject = head.subject
     ? stack([
-        textBox(face, head.subject.name, subjectText, {
-          size: type.subject,
-          bold: true,
-          leading: type.subject * 1.1,
-          block,
-        }),
+        nameBox(head.subject.name, subjectText, face),
         ...(head.subject.lines ?? []).map((line: RichText) =>
           textBox(face, line, subjectText, { size: type.body, block }),
         ),
@@ -67,6 +63,13 @@ export function cartouche(model: PdfDocumentModel, face: Typeface, geometry: Pag
       canvas.rule(x, top + height, x + width, top + height, line)
     },
   }
+}
+
+/** The subject's name as large as its longest word allows, so that a name is not torn for the sake of its size. */
+function nameBox(name: string, width: number, face: Typeface): TextBox {
+  const longestWord = leastWidths(face, name, { size: type.subject, bold: true, block }).whole
+  const size = Math.max(type.strong, Math.min(type.subject, (type.subject * width) / (longestWord + 0.1)))
+  return textBox(face, name, width, { size, bold: true, leading: size * 1.12, block })
 }
 
 /** The head of every page after the first: document, number, version, signers, and the subject at the right. */

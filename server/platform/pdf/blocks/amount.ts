@@ -42,23 +42,22 @@ export function measureAmount(block: AmountBlock, measure: Measure): Piece[] {
     return { height: box.height, before, block: name, draw: (canvas, x, top) => canvas.text(box, x, top) }
   }
   const limits = block.limits === undefined ? undefined : plain(block.limits, type.body, px(5))
-  return [
-    together([
-      ...(block.above === undefined ? [] : [plain(block.above, type.label, 0)]),
-      large,
-      ...block.lines.map((line) => plain(line, type.body, 0)),
-      ...(limits
-        ? [
-            {
-              ...limits,
-              height: limits.height + px(5),
-              draw: (...[canvas, x, top]: Parameters<Piece['draw']>) => {
-                canvas.rule(x, top, x + width, top, { weight: px(0.75), colour: [0.6, 0.6, 0.6] })
-                limits.draw(canvas, x, top + px(5))
-              },
+  const whole = together([
+    ...(block.above === undefined ? [] : [plain(block.above, type.label, 0)]),
+    large,
+    ...block.lines.map((line) => plain(line, type.body, 0)),
+    ...(limits
+      ? [
+          {
+            ...limits,
+            height: limits.height + px(5),
+            draw: (...[canvas, x, top]: Parameters<Piece['draw']>) => {
+              canvas.rule(x, top, x + width, top, { weight: px(0.75), colour: [0.6, 0.6, 0.6] })
+              limits.draw(canvas, x, top + px(5))
             },
-          ]
-        : []),
-    ]),
-  ]
+          },
+        ]
+      : []),
+  ])
+  return [{ ...whole, before: px(5) }]
 }

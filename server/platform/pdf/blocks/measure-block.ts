@@ -21,6 +21,7 @@ import { measureWorking } from './working.ts'
 export function measureBlocks(blocks: readonly DocumentBlock[], measure: Measure): Piece[] {
   const pieces: Piece[] = []
   let breakBefore = false
+  let previous: DocumentBlock['kind'] | undefined
   for (const block of blocks) {
     if (block.kind === 'page-break') {
       breakBefore = true
@@ -28,8 +29,11 @@ export function measureBlocks(blocks: readonly DocumentBlock[], measure: Measure
     }
     const [head, ...rest] = measureBlock(block, measure)
     if (!head) continue
-    pieces.push(breakBefore ? { ...head, breakBefore } : head, ...rest)
+    // A heading brings its own room; anything else needs some before the head of a table.
+    const before = block.kind === 'table' && previous === 'heading' ? 0 : head.before
+    pieces.push({ ...head, before, ...(breakBefore ? { breakBefore } : {}) }, ...rest)
     breakBefore = false
+    previous = block.kind
   }
   return pieces
 }

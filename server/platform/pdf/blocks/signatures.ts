@@ -13,11 +13,10 @@ const outline = px(3)
 
 /** Signatures two by two inside a double ink edge, the sign of what may be signed. */
 export function measureSignatures(block: SignaturesBlock, measure: Measure): Piece[] {
-  const columns = block.entries.length === 1 ? 1 : 2
-  const width = measure.width / columns
   const pieces: Piece[] = []
-  for (let i = 0; i < block.entries.length; i += columns) {
-    const row = block.entries.slice(i, i + columns)
+  for (let i = 0; i < block.entries.length; i += 2) {
+    const row = block.entries.slice(i, i + 2)
+    const width = measure.width / row.length
     const name = `signature "${row[0]?.name ?? ''}"`
     const broken = row.map((entry) => entry.check === 'broken')
     pieces.push(
@@ -38,7 +37,7 @@ export function measureSignatures(block: SignaturesBlock, measure: Measure): Pie
             const inner = [top + outline, height - 2 * outline] as const
             canvas.box(x, inner[0], measure.width, inner[1], { stroke: { weight: px(1) } })
             canvas.box(x - outline, top, measure.width + 2 * outline, height, { stroke: { weight: px(1) } })
-            if (columns === 2)
+            if (row.length === 2)
               canvas.rule(x + width, inner[0], x + width, inner[0] + inner[1], { weight: px(1) })
             broken.forEach((isBroken, column) => {
               if (isBroken)

@@ -48,7 +48,7 @@ export function measureTable(block: TableBlock, measure: Measure): Piece[] {
     ),
     {
       block: name,
-      before: 0,
+      before: px(9),
       padTop: px(1),
       padBottom: px(3),
       keepWithNext: true,
