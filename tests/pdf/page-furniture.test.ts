@@ -5,7 +5,7 @@ import { documentWords } from '../../shared/messages/documents.ts'
 import type { FlagLetter } from '../../shared/domain/documents/pdf-document-model.ts'
 import { historyLike } from './examples/history-like.ts'
 import { orderLike } from './examples/order-like.ts'
-import { greyOf, pageCount, textOf, wordsOf } from './support/poppler.ts'
+import { greyOf, pageCount, pageTexts, textOf, wordsOf } from './support/poppler.ts'
 
 afterEach(() => setMessageLocale('en'))
 
@@ -93,10 +93,8 @@ describe('page furniture', () => {
           ],
         }),
       )
-      const pageOf = (text: string) => {
-        const pages = Array.from({ length: pageCount(bytes) }, (_, i) => textOf(bytes, i + 1))
-        return pages.findIndex((page) => page.includes(text))
-      }
+      const pages = pageTexts(bytes)
+      const pageOf = (text: string) => pages.findIndex((page) => page.includes(text))
       expect(pageOf('First row'), `${rows} lines`).toBe(pageOf('Kept heading'))
       expect(pageOf('group end')).toBe(pageOf('group begin'))
     }

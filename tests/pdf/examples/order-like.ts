@@ -1,4 +1,5 @@
 import type { PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
+import { standingCaution } from '../../../server/platform/pdf/standing-caution.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 
 /**
@@ -208,14 +209,7 @@ export function orderLike(changes: Partial<PdfDocumentModel> = {}): PdfDocumentM
           },
         ],
       },
-      {
-        kind: 'paragraph',
-        size: 'small',
-        text: [
-          { text: `${documentWords.standingCautionTitle}. `, bold: true },
-          { text: documentWords.standingCaution },
-        ],
-      },
+      standingCaution(),
     ],
     ...changes,
   }

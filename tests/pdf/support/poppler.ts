@@ -15,6 +15,11 @@ export function textOf(bytes: Uint8Array, page?: number): string {
   return poppler('pdftotext', ['-raw', ...pagesFrom(page), '-', '-'], bytes).toString('utf8')
 }
 
+/** The text of each page; poppler ends a page with a form feed. */
+export function pageTexts(bytes: Uint8Array): string[] {
+  return textOf(bytes).split('\f').slice(0, -1)
+}
+
 /** One form for both sides of a comparison: the micro sign is drawn as mu, which NFKC makes of it too. */
 export const nfkc = (text: string): string => text.normalize('NFKC')
 
