@@ -1,0 +1,58 @@
+import { classNames } from '../class-names.ts'
+import { shortDay } from './day-words.ts'
+import type { CourseGeometry } from './passage-geometry.ts'
+import { harbourWords } from './passage-words.ts'
+import type { PassageView } from './passage-view.ts'
+
+/** Room that date and days need right of the anchor, in one line and in two. */
+const roomOneLine = 125
+const roomTwoLines = 82
+
+/** On the land of a board row: the date of earliest clearance and how far away it is; or why nothing is set. */
+export function HarbourLabel({
+  view,
+  course,
+  width,
+  oneLine,
+}: {
+  view: PassageView
+  course: CourseGeometry
+  width: number
+  oneLine: boolean
+}) {
+  const { y } = course
+  if (course.heldX !== null) {
+    return (
+      <text x={course.heldX + 12} y={y + 4} className="s-11 s-n s-2">
+        {view.held}
+      </text>
+    )
+  }
+  if (!view.harbour || course.harbourX === null) return null
+  const x = course.harbourX
+  const date = shortDay(view.harbour.on)
+  const words = harbourWords(view)
+  const colour = view.harbour.allMet && x <= course.nowX + 0.5 && 's-g'
+  const tooNear = x + 20 + (oneLine ? roomOneLine : roomTwoLines) - 20 > width
+  if (oneLine || tooNear) {
+    // near the edge: over the course and left of the anchor
+    return (
+      <text x={tooNear ? x - 8 : x + 20} y={tooNear ? y - 10 : y + 4} className={tooNear ? 'end' : undefined}>
+        <tspan className={classNames('s-13 s-b', colour)}>{date}</tspan>
+        <tspan className="s-11 s-n s-2" dx="6">
+          {words}
+        </tspan>
+      </text>
+    )
+  }
+  return (
+    <>
+      <text x={x + 20} y={y - 1} className={classNames('s-13 s-b', colour)}>
+        {date}
+      </text>
+      <text x={x + 20} y={y + 13} className="s-11 s-n s-2">
+        {words}
+      </text>
+    </>
+  )
+}
