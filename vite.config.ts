@@ -1,14 +1,25 @@
 /// <reference types="vitest/config" />
 import { defineConfig } from 'vite'
+import type { Plugin } from 'vite'
 import react from '@vitejs/plugin-react'
 import tailwindcss from '@tailwindcss/vite'
 
 const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
 const withPostgres = { globalSetup: ['tests/support/postgres.ts'], pool: 'forks' as const }
 
+/** Nothing is painted before the script has set the person's light: a dark gallery must not flash white. */
+const paintAfterTheme: Plugin = {
+  name: 'paint-after-theme',
+  transformIndexHtml: {
+    order: 'post',
+    handler: (html) => html.replace('<script type="module" crossorigin ', '$&blocking="render" '),
+  },
+}
+
 export default defineConfig({
-  plugins: [react(), tailwindcss()],
-  build: { outDir: 'dist/client', manifest: true },
+  plugins: [react(), tailwindcss(), paintAfterTheme],
+  // Fonts stay files: the content security policy takes none from data addresses
+  build: { outDir: 'dist/client', manifest: true, assetsInlineLimit: 0 },
   test: {
     projects: [
       {

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
 import { Email, LocalDate, PersonName, RecordId, RoleName } from './primitives.ts'
+import { signInAddresses } from './sign-in.addresses.ts'
 
 /** A licence to practise, as far as every screen needs it. */
 export const LicenceBrief = z.object({
@@ -41,9 +42,7 @@ export const Credentials = z.strictObject({
 })
 
 export const signIn = contract({
-  id: 'signIn',
-  method: 'post',
-  path: '/sign-in',
+  ...signInAddresses.signIn,
   action: 'public',
   summary: 'Sign in with e-mail and password',
   body: Credentials,
@@ -52,9 +51,7 @@ export const signIn = contract({
 })
 
 export const signOut = contract({
-  id: 'signOut',
-  method: 'post',
-  path: '/sign-out',
+  ...signInAddresses.signOut,
   action: 'signed-in',
   summary: 'End this session',
   reply: { 204: z.null() },
@@ -62,9 +59,7 @@ export const signOut = contract({
 })
 
 export const getMe = contract({
-  id: 'getMe',
-  method: 'get',
-  path: '/me',
+  ...signInAddresses.getMe,
   action: 'signed-in',
   summary: 'Who is signed in, with roles and licences',
   reply: { 200: Me },
@@ -103,9 +98,7 @@ export const preferenceNames = [
 ] as const
 
 export const setPreference = contract({
-  id: 'setPreference',
-  method: 'put',
-  path: '/me/preferences/:name',
+  ...signInAddresses.setPreference,
   action: 'profile.manage',
   summary: 'Set one preference of one’s own',
   params: z.strictObject({ name: z.enum(preferenceNames).describe('Which preference') }),

@@ -14,12 +14,8 @@ export const partWords = defineMessages({
   keepNumber: (p: { value: string; unit: string }) => `Keep ${p.value}\u00a0${p.unit}`,
   convertNumber: (p: { value: string; unit: string }) => `Convert to ${p.value}\u00a0${p.unit}`,
   backToUnit: (p: { unit: string }) => `Back to ${p.unit}`,
-  twoSeparators: 'A number has one decimal point. Type it again, for example 1200.5.',
-  commaUnclear: 'A comma can be read two ways. Write 1200 or 1.2, with a point.',
-  notANumber: 'Type a number, for example 0.68.',
   negative: 'Type a number that is not below 0.',
-  workedOut: (p: { typed: string; value: string; unit: string }) =>
-    `${p.typed} = ${p.value}\u00a0${p.unit}`,
+  workedOut: (p: { typed: string; value: string; unit: string }) => `${p.typed} = ${p.value}\u00a0${p.unit}`,
   workingOut: 'working out…',
   cannotWorkOut: 'This can’t be worked out. Use numbers, + - * / and units, for example 2.4 * 1.2.',
   showPassword: 'Show the password',
@@ -53,7 +49,8 @@ export const partWords = defineMessages({
   rowsAreOld: (p: { at: string }) =>
     `What stands below is from ${p.at} and may have changed. Check the paper before you act on it.`,
   nothingBelow: 'Nothing is shown, because nothing could be read.',
-  giveCode: (p: { code: string }) => `If it goes on, tell whoever looks after Pratique, and give the code ${p.code}.`,
+  giveCode: (p: { code: string }) =>
+    `If it goes on, tell whoever looks after Pratique, and give the code ${p.code}.`,
   lastRead: (p: { at: string }) => `last read ${p.at}`,
   sortedUp: 'sorted, smallest first',
   sortedDown: 'sorted, largest first',

@@ -26,7 +26,10 @@ export interface ButtonLook {
 }
 
 /** The classes of a button, shared by buttons and by links that look like one. */
-export function buttonClass({ kind = 'edge', size = 'usual', block = false }: ButtonLook, more?: string): string {
+export function buttonClass(
+  { kind = 'edge', size = 'usual', block = false }: ButtonLook,
+  more?: string,
+): string {
   return classNames(
     'btn',
     kind !== 'edge' && kind !== 'hold' && `btn-${kind}`,
@@ -37,7 +40,12 @@ export function buttonClass({ kind = 'edge', size = 'usual', block = false }: Bu
 }
 
 /** What stands inside a button or a button-like link. */
-export function ButtonFace({ kind = 'edge', size = 'usual', icon, children }: ButtonLook & { children: ReactNode }) {
+export function ButtonFace({
+  kind = 'edge',
+  size = 'usual',
+  icon,
+  children,
+}: ButtonLook & { children: ReactNode }) {
   const drawing = icon === undefined ? ownIcon[kind] : icon
   return (
     <>

@@ -32,7 +32,19 @@ export type ComboboxProps = FieldProps & {
  * was chosen. Leaving the field never chooses by itself.
  */
 export function Combobox(props: ComboboxProps) {
-  const { options, value, onChange, onSearch, searching, valueName, label, hint, wrong, optional, labelHidden } = props
+  const {
+    options,
+    value,
+    onChange,
+    onSearch,
+    searching,
+    valueName,
+    label,
+    hint,
+    wrong,
+    optional,
+    labelHidden,
+  } = props
   const listId = useId()
   const [open, setOpen] = useState(false)
   const [typed, setTyped] = useState<string | null>(null)
@@ -136,7 +148,14 @@ export function Combobox(props: ComboboxProps) {
               <Icon of={ChevronDown} />
             </button>
           </div>
-          <ul ref={list} id={listId} role="listbox" aria-label={label} className="combobox-list" hidden={!open}>
+          <ul
+            ref={list}
+            id={listId}
+            role="listbox"
+            aria-label={label}
+            className="combobox-list"
+            hidden={!open}
+          >
             {open
               ? found.map((option, i) => (
                   <OptionRow
@@ -197,7 +216,9 @@ function OptionRow({
       }}
     >
       <b>
-        {markedParts(option.name, typed).map((part, i) => (part.marked ? <u key={i}>{part.text}</u> : part.text))}
+        {markedParts(option.name, typed).map((part, i) =>
+          part.marked ? <u key={i}>{part.text}</u> : part.text,
+        )}
       </b>
       {option.detail ? <span className="t-2">{option.detail}</span> : null}
       {option.aside ? <span className="aside num">{option.aside}</span> : null}

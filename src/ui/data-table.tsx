@@ -94,7 +94,10 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
       {props.above}
       <div className="table-scroll">
         <table
-          className={classNames('data-table', props.density && props.density !== 'usual' && `is-${props.density}`)}
+          className={classNames(
+            'data-table',
+            props.density && props.density !== 'usual' && `is-${props.density}`,
+          )}
           aria-label={props.label}
         >
           <thead>
@@ -112,7 +115,9 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
                     {header.column.getCanSort() ? (
                       <button type="button" onClick={() => header.column.toggleSorting(sorted === 'asc')}>
                         <table.FlexRender header={header} />
-                        <Icon of={sorted === 'asc' ? ArrowUp : sorted === 'desc' ? ArrowDown : ChevronsUpDown} />
+                        <Icon
+                          of={sorted === 'asc' ? ArrowUp : sorted === 'desc' ? ArrowDown : ChevronsUpDown}
+                        />
                       </button>
                     ) : (
                       <table.FlexRender header={header} />
@@ -138,7 +143,10 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
                     {row.getAllCells().map((cell, i) => {
                       const column = byId.get(cell.column.id)
                       return (
-                        <td key={cell.id} className={classNames(column?.number && 'is-number', column?.className)}>
+                        <td
+                          key={cell.id}
+                          className={classNames(column?.number && 'is-number', column?.className)}
+                        >
                           <table.FlexRender cell={cell} />
                           {i === 0 && late !== null ? (
                             <span className="late-words">{partWords.late({ by: late })}</span>
@@ -159,10 +167,18 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
           label={props.label}
           {...footOf(paging, rows.length, shownPage, size)}
           onBefore={
-            paging?.kind === 'server' ? paging.onBefore : shownPage > 0 ? () => setPage(shownPage - 1) : undefined
+            paging?.kind === 'server'
+              ? paging.onBefore
+              : shownPage > 0
+                ? () => setPage(shownPage - 1)
+                : undefined
           }
           onNext={
-            paging?.kind === 'server' ? paging.onNext : shownPage < lastPage ? () => setPage(shownPage + 1) : undefined
+            paging?.kind === 'server'
+              ? paging.onNext
+              : shownPage < lastPage
+                ? () => setPage(shownPage + 1)
+                : undefined
           }
         />
       )}
@@ -171,7 +187,8 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
 }
 
 function footOf(paging: TablePaging | undefined, count: number, page: number, size: number) {
-  if (paging?.kind === 'server') return { from: paging.from, to: paging.from + count - 1, total: paging.total }
+  if (paging?.kind === 'server')
+    return { from: paging.from, to: paging.from + count - 1, total: paging.total }
   return { from: page * size + 1, to: Math.min(count, (page + 1) * size), total: count }
 }
 
@@ -213,7 +230,11 @@ function TableFoot({
 }
 
 /** The control of another row that an arrow, Home or End leads to: the same one in the row, where there is one. */
-function rowInReach(key: string, from: HTMLElement, body: HTMLTableSectionElement | null): HTMLElement | null {
+function rowInReach(
+  key: string,
+  from: HTMLElement,
+  body: HTMLTableSectionElement | null,
+): HTMLElement | null {
   if (!body || !['ArrowDown', 'ArrowUp', 'Home', 'End'].includes(key)) return null
   if (from.matches('input, select, textarea')) return null
   const controls = (row: Element) => [...row.querySelectorAll<HTMLElement>('a, button')]

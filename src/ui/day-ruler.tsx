@@ -1,4 +1,5 @@
-import { addDays, daysBetween, longDay, shortDay } from './passage/day-words.ts'
+import { addDays, daysBetween } from '../../shared/domain/time/facility-date.ts'
+import { longDay, shortDay } from './day-words.ts'
 import type { DayScale } from './passage/day-scale.ts'
 
 const height = 40

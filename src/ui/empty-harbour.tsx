@@ -13,7 +13,17 @@ export function EmptyHarbour() {
 }
 
 /** The harbour mark; green only when every condition is met. */
-export function AnchorMark({ x, y, scale = 1, met = false }: { x: number; y: number; scale?: number; met?: boolean }) {
+export function AnchorMark({
+  x,
+  y,
+  scale = 1,
+  met = false,
+}: {
+  x: number
+  y: number
+  scale?: number
+  met?: boolean
+}) {
   return (
     <g transform={`translate(${x} ${y}) scale(${scale})`} className={met ? 'p-anchor is-met' : 'p-anchor'}>
       <circle cx="0" cy="-6.2" r="2" />

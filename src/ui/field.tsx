@@ -53,7 +53,15 @@ export function Field({
 }
 
 /** The line under a control. */
-export function FieldBelow({ id, hint, wrong }: { id: string; hint?: ReactNode; wrong?: string | undefined }) {
+export function FieldBelow({
+  id,
+  hint,
+  wrong,
+}: {
+  id: string
+  hint?: ReactNode
+  wrong?: string | undefined
+}) {
   if (wrong) {
     return (
       <span id={id} className="wrong">

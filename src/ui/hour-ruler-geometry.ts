@@ -35,7 +35,12 @@ export interface RulerGeometry {
   grades: { x: number; width: number }[]
   hourNames: { x: number; text: string }[]
   ranks: RulerRank[]
-  overdue: { rings: number[]; words: { x: number; text: string } | null; number: string | null; items: DueItem[] }
+  overdue: {
+    rings: number[]
+    words: { x: number; text: string } | null
+    number: string | null
+    items: DueItem[]
+  }
   nowX: number
   /** The time stands left of the mark near the right end. */
   nowTextLeft: boolean

@@ -107,7 +107,9 @@ function PointerTargets({
 }) {
   const late = ruler.overdue.items.length
   const targets = [
-    ...(late > 0 ? [{ x: 0, top: -3, width: Math.max(24, ruler.overdue.rings.length * 15 + 4), from: 0, count: late }] : []),
+    ...(late > 0
+      ? [{ x: 0, top: -3, width: Math.max(24, ruler.overdue.rings.length * 15 + 4), from: 0, count: late }]
+      : []),
     ...ruler.ranks.map((rank) => ({
       x: rank.x,
       top: 8,
@@ -151,7 +153,11 @@ function RulerTip({ stop, width }: { stop: RulerGeometry['stops'][number]; width
   const { item, x } = stop
   const fromRight = !stop.overdue && item.dueMinute >= tipsTurnAt
   return (
-    <p className="ruler-tip" aria-hidden="true" style={fromRight ? { right: width - x - 2 } : { left: x - 2 }}>
+    <p
+      className="ruler-tip"
+      aria-hidden="true"
+      style={fromRight ? { right: width - x - 2 } : { left: x - 2 }}
+    >
       <b>{item.time}</b> {[item.what, item.until].filter(Boolean).join(', ')}
     </p>
   )

@@ -7,7 +7,11 @@ import { Dialog } from './dialog.tsx'
 export function KeyListDialog({ onBack }: { onBack: () => void }) {
   const command = isMac() ? partWords.keyCommand : partWords.keyCtrl
   return (
-    <Dialog question={partWords.keys} onBack={onBack} acts={<Button onClick={onBack}>{partWords.close}</Button>}>
+    <Dialog
+      question={partWords.keys}
+      onBack={onBack}
+      acts={<Button onClick={onBack}>{partWords.close}</Button>}
+    >
       <dl className="key-list">
         <Line keys={<Key>g</Key>} says={partWords.keysGo} />
         <Line

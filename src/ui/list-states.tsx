@@ -6,7 +6,15 @@ import { EmptyHarbour } from './empty-harbour.tsx'
 import { Icon } from './icon.tsx'
 
 /** Nothing in the list: what that means, and the next act. */
-export function ListEmpty({ title, children, act }: { title: string; children?: ReactNode; act?: ReactNode }) {
+export function ListEmpty({
+  title,
+  children,
+  act,
+}: {
+  title: string
+  children?: ReactNode
+  act?: ReactNode
+}) {
   return (
     <div className="list-empty">
       <EmptyHarbour />
@@ -79,13 +87,15 @@ export function ListFetching({ what, rows = 4 }: { what: string; rows?: number }
       </div>
       <div className="fetching-bar" role="progressbar" aria-label={partWords.fetchingWhat({ what })} />
       <ul aria-hidden="true">
-        {Array.from({ length: rows }, (_, i) => widths[i % widths.length] ?? widths[0]).map(([first, second], i) => (
-          <li key={i} className="skeleton">
-            <span className="w-16" />
-            <span className={first} />
-            <span className={second} />
-          </li>
-        ))}
+        {Array.from({ length: rows }, (_, i) => widths[i % widths.length] ?? widths[0]).map(
+          ([first, second], i) => (
+            <li key={i} className="skeleton">
+              <span className="w-16" />
+              <span className={first} />
+              <span className={second} />
+            </li>
+          ),
+        )}
       </ul>
     </div>
   )

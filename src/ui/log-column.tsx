@@ -96,7 +96,8 @@ function LogBody({
       tabIndex={-1}
       onKeyDown={(event) => {
         const target = event.target as HTMLElement
-        if (!keysOn || event.key.toLowerCase() !== 'n' || event.ctrlKey || event.metaKey || event.altKey) return
+        if (!keysOn || event.key.toLowerCase() !== 'n' || event.ctrlKey || event.metaKey || event.altKey)
+          return
         if (target.matches('input, textarea, select')) return
         event.preventDefault()
         event.currentTarget.querySelector<HTMLElement>('.log-foot :is(input, textarea, button, a)')?.focus()

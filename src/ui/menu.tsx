@@ -64,7 +64,9 @@ export function Menu({
       setOpen(false)
     } else if (event.key.length === 1 && /\S/.test(event.key)) {
       const after = [...all.slice(at + 1), ...all.slice(0, at + 1)]
-      after.find((item) => item.textContent?.trim().toLowerCase().startsWith(event.key.toLowerCase()))?.focus()
+      after
+        .find((item) => item.textContent?.trim().toLowerCase().startsWith(event.key.toLowerCase()))
+        ?.focus()
       event.stopPropagation()
     }
   }

@@ -39,7 +39,8 @@ export type QuantityFieldProps = FieldProps &
  * changed unit asks whether the number is kept or converted.
  */
 export function QuantityField(props: QuantityFieldProps) {
-  const { quantity, units, label, hint, wrong, optional, labelHidden, id, name, ref, disabled, onBlur } = props
+  const { quantity, units, label, hint, wrong, optional, labelHidden, id, name, ref, disabled, onBlur } =
+    props
   const state = useQuantityField(props)
   const said = wrong ?? state.fault
   const below = state.working ? partWords.workingOut : (state.workedOut ?? hint)

@@ -1,36 +1,29 @@
+import type { FormattedQuantity } from '../../shared/domain/quantities/formatted-quantity.ts'
 import { classNames } from './class-names.ts'
-
-export type QuantityKind = 'dose' | 'reading' | 'volume'
 
 const noBreak = '\u00a0'
 
 /**
- * A formatted quantity. The formatter of `shared/` made number and unit; this only sets them, never parts them, and
- * marks in the page which rule of writing holds (a dose has no trailing zero, a reading keeps its digits).
+ * A formatted quantity. The formatters of `shared/domain/quantities` made it; this only sets it, never parts number and
+ * unit, and marks in the page which rule of writing holds (a dose has no trailing zero, a reading keeps its digits).
  *
- * @param number digits as formatted, for example `0.44` or `2,220`
- * @param unit   unit as written beside it, `''` for none (pH)
- * @param error  how exact a volume is, `± 2 %`
+ * In the two large sizes the unit is set smaller, beside the number it belongs to.
  */
 export function Quantity({
-  kind,
-  number,
-  unit,
-  error,
+  of,
   size = 'text',
   late = false,
 }: {
-  kind: QuantityKind
-  number: string
-  unit: string
-  error?: string
+  of: FormattedQuantity
   size?: 'text' | 'strong' | 'mid' | 'dose'
   /** Out of range or overdue; words beside it must say so too. */
   late?: boolean
 }) {
+  const large = size === 'mid' || size === 'dose'
+  const unitFollows = of.text.startsWith(of.number)
   return (
     <span
-      data-quantity={kind}
+      data-quantity={of.kind}
       className={classNames(
         size === 'strong' && 'quantity-strong',
         size === 'mid' && 'quantity-mid-size',
@@ -38,19 +31,15 @@ export function Quantity({
         late && 'text-magenta',
       )}
     >
-      {number}
-      {unit ? (
+      {large && unitFollows ? (
         <>
-          {noBreak}
-          <span className={size === 'text' || size === 'strong' ? undefined : 'unit'}>{unit}</span>
+          {of.number}
+          {/* what follows the number: unit, and the error of a volume */}
+          <span className="unit">{of.text.slice(of.number.length) || noBreak}</span>
         </>
-      ) : null}
-      {error ? (
-        <span className="unit">
-          {noBreak}
-          {error.replaceAll(' ', noBreak)}
-        </span>
-      ) : null}
+      ) : (
+        of.text
+      )}
     </span>
   )
 }

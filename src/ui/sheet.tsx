@@ -1,35 +1,28 @@
+import { createContext, useContext } from 'react'
 import type { ComponentProps, ReactNode } from 'react'
 import { classNames } from './class-names.ts'
 
-export type SheetRecipe =
-  | 'plain'
-  | 'list'
-  | 'board'
-  | 'case'
-  | 'order'
-  | 'record'
-  | 'enclosure'
-  | 'register'
+export type SheetRecipe = 'plain' | 'list' | 'board' | 'case' | 'order' | 'record' | 'enclosure' | 'register'
+
+/** Whether an hour ruler stands above the sheet and is its upper edge. The frame says so. */
+export const HoursAboveContext = createContext(false)
 
 /**
  * The sheet inside its neat line. One task is one sheet; its children are areas, which meet at ink rules. The recipe
  * gives the columns and what becomes of them at 1200, 900 and 600 px.
- *
- * @param withoutHours no hour ruler above, so the sheet draws its own upper edge
  */
 export function Sheet({
   recipe = 'plain',
-  withoutHours = false,
   className,
   children,
 }: {
   recipe?: SheetRecipe
-  withoutHours?: boolean
   className?: string
   children: ReactNode
 }) {
+  const hoursAbove = useContext(HoursAboveContext)
   return (
-    <main id="chart" tabIndex={-1} className={classNames('chart', withoutHours && 'chart-without-hours')}>
+    <main id="chart" tabIndex={-1} className={classNames('chart', !hoursAbove && 'chart-without-hours')}>
       <div className={classNames('neat', `recipe-${recipe}`, className)}>{children}</div>
     </main>
   )

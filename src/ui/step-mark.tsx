@@ -4,7 +4,17 @@ export type StepState = 'done' | 'due' | 'to-come' | 'overdue' | 'failed'
  * The mark of a step: filled, heavy ring, light ring, double magenta ring, cross. Each state has a shape of its own.
  * `small` as on the board, otherwise as in a case.
  */
-export function StepMark({ state, x, y, small }: { state: StepState; x: number; y: number; small?: boolean }) {
+export function StepMark({
+  state,
+  x,
+  y,
+  small,
+}: {
+  state: StepState
+  x: number
+  y: number
+  small?: boolean
+}) {
   if (state === 'failed') return <path d={`M${x - 5} ${y - 5}l10 10m0 -10l-10 10`} className="p-failed" />
   if (state === 'overdue') {
     return (

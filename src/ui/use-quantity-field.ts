@@ -1,5 +1,6 @@
 import { useContext, useRef, useState } from 'react'
 import { partWords } from '../../shared/messages/parts.ts'
+import { sayNumberRefusal } from '../../shared/messages/say-number-refusal.ts'
 import { readQuantityText } from './quantity-text.ts'
 import { QuantityToolsContext } from './quantity-context.ts'
 import type { QuantityTools } from './quantity-context.ts'
@@ -8,12 +9,6 @@ import type { QuantityTools } from './quantity-context.ts'
 export interface TypedQuantity {
   value: string
   unit: string
-}
-
-const refusals = {
-  'two-separators': () => partWords.twoSeparators,
-  'comma-unclear': () => partWords.commaUnclear,
-  'not-a-number': () => partWords.notANumber,
 }
 
 interface Options extends QuantityTools {
@@ -60,12 +55,12 @@ export function useQuantityField({ quantity, onChange, allowNegative, ...given }
     const typed = quantity.value
     const read = readQuantityText(typed)
     if (read.kind === 'empty') return setFault(undefined)
-    if (read.kind === 'refused') return setFault(refusals[read.why]())
+    if (read.kind === 'refused') return setFault(sayNumberRefusal(read.refusal))
     if (read.kind === 'number') {
       if (judge(read.value) && read.value !== typed) onChange({ value: read.value, unit: quantity.unit })
       return
     }
-    if (!evaluate) return setFault(partWords.notANumber)
+    if (!evaluate) return setFault(sayNumberRefusal({ code: 'not-a-number' }))
     setWorking(true)
     const answer = await evaluate(typed, quantity.unit)
     setWorking(false)

@@ -10,7 +10,13 @@ export interface WrongField {
 }
 
 /** Above a form that could not be sent: every field at fault, each a link to it. The caller moves the focus to the first. */
-export function WrongSummary({ fields, general }: { fields: readonly WrongField[]; general?: string | undefined }) {
+export function WrongSummary({
+  fields,
+  general,
+}: {
+  fields: readonly WrongField[]
+  general?: string | undefined
+}) {
   if (fields.length === 0 && !general) return null
   return (
     <div className="border-2 border-ink px-3 py-2 grid gap-1" role="alert">

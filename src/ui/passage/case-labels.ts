@@ -1,4 +1,4 @@
-import { daysBetween } from './day-words.ts'
+import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import { overlap, textBox } from './passage-geometry.ts'
 import type { CourseMark } from './passage-geometry.ts'
 import type { PassageView } from './passage-view.ts'

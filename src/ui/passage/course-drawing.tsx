@@ -36,7 +36,10 @@ export function CourseDrawing({
       ))}
       {course.pauses.map((pause) => (
         <g key={pause.x1}>
-          <path d={`M${pause.x1} ${y - half}v${half * 2}M${pause.x2} ${y - half}v${half * 2}`} className="p-line" />
+          <path
+            d={`M${pause.x1} ${y - half}v${half * 2}M${pause.x2} ${y - half}v${half * 2}`}
+            className="p-line"
+          />
           {size === 'close' ? null : (
             <text x={(pause.x1 + pause.x2) / 2} y={y - half - 5} className="s-11 s-n s-2 mid">
               {passageWords.paused({ days: pause.days })}
@@ -85,7 +88,12 @@ function MergedMark({ mark, small }: { mark: CourseMark; small: boolean }) {
   }
   return (
     <g opacity={old ? 0.7 : undefined}>
-      <circle cx={x} cy={y} r="7" className={state === 'done' ? 'p-done' : state === 'due' ? 'p-due' : 'p-to-come'} />
+      <circle
+        cx={x}
+        cy={y}
+        r="7"
+        className={state === 'done' ? 'p-done' : state === 'due' ? 'p-due' : 'p-to-come'}
+      />
       <text x={x} y={y + 3.8} className={classNames('s-10 s-b mid', state === 'done' && 's-paper')}>
         {fixes.length}
       </text>
@@ -105,7 +113,11 @@ function CourseWords({ text }: { text: CourseText }) {
     <text
       x={text.x}
       y={text.y}
-      className={classNames(looks[text.kind], text.anchor === 'end' && 'end', text.anchor === 'middle' && 'mid')}
+      className={classNames(
+        looks[text.kind],
+        text.anchor === 'end' && 'end',
+        text.anchor === 'middle' && 'mid',
+      )}
     >
       {text.text}
     </text>

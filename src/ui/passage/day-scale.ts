@@ -1,4 +1,4 @@
-import { addDays, daysBetween } from './day-words.ts'
+import { addDays, daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import type { DayDate } from './passage-view.ts'
 
 /** Where a facility date stands on a drawing: its beginning, in px from the left edge. */

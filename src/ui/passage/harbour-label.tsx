@@ -1,5 +1,5 @@
 import { classNames } from '../class-names.ts'
-import { shortDay } from './day-words.ts'
+import { shortDay } from '../day-words.ts'
 import type { CourseGeometry } from './passage-geometry.ts'
 import { harbourWords } from './passage-words.ts'
 import type { PassageView } from './passage-view.ts'

@@ -8,7 +8,7 @@ import { useWidth } from '../use-width.ts'
 import { coastPath, landPath } from './coast.ts'
 import { CourseDrawing } from './course-drawing.tsx'
 import { dayScale, weekStarts } from './day-scale.ts'
-import { shortDay } from './day-words.ts'
+import { shortDay } from '../day-words.ts'
 import { HarbourLabel } from './harbour-label.tsx'
 import { layPassage } from './passage-geometry.ts'
 import { PassageFixes } from './passage-fixes.tsx'
@@ -61,7 +61,9 @@ export function PassageBoard({ passages, from, until, today, density }: PassageB
               height={phone ? layout.head : layout.height}
               close={density === 'close' && !phone}
             />
-            {phone ? <div className="board-head-gap" style={{ height: layout.height - layout.head }} /> : null}
+            {phone ? (
+              <div className="board-head-gap" style={{ height: layout.height - layout.head }} />
+            ) : null}
           </li>
         ))}
       </ol>

@@ -6,7 +6,8 @@ import { layCaseLabels } from './case-labels.ts'
 import { CourseDrawing } from './course-drawing.tsx'
 import { dayScale, weekStarts } from './day-scale.ts'
 import type { DayScale } from './day-scale.ts'
-import { daysBetween, shortDay } from './day-words.ts'
+import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
+import { shortDay } from '../day-words.ts'
 import { layPassage, textBox } from './passage-geometry.ts'
 import type { CourseGeometry, OldLeg } from './passage-geometry.ts'
 import { PassageFixes } from './passage-fixes.tsx'
@@ -33,7 +34,13 @@ export function PassageCase({
   const [frame, width] = useWidth<HTMLDivElement>(1128)
   const scale = dayScale(from, until, width)
   const course = layPassage(view, scale, courseY, 'case')
-  const labels = layCaseLabels(view, course.marks, courseY, width, (day) => passageWords.day.toLowerCase() + ' ' + day)
+  const labels = layCaseLabels(
+    view,
+    course.marks,
+    courseY,
+    width,
+    (day) => passageWords.day.toLowerCase() + ' ' + day,
+  )
   const shoreX = course.harbourX === null ? null : course.harbourX + 13
 
   return (
@@ -130,14 +137,28 @@ function Soundings({
 }: {
   view: PassageView
   scale: DayScale
-  labels: readonly { x: number; dayY: number; day: string; words: string; anchor: 'start' | 'middle' | 'end' }[]
+  labels: readonly {
+    x: number
+    dayY: number
+    day: string
+    words: string
+    anchor: 'start' | 'middle' | 'end'
+  }[]
 }) {
   return view.legs.flatMap((leg) =>
     leg.counts
-      .map((count) => ({ ...count, x: scale.x(count.on), y: leg.until === null ? courseY - 10 : courseY - 74 + 20 }))
+      .map((count) => ({
+        ...count,
+        x: scale.x(count.on),
+        y: leg.until === null ? courseY - 10 : courseY - 74 + 20,
+      }))
       .filter(({ x, y }) =>
         labels.every((label) => {
-          const box = textBox({ ...label, text: label.words.length > label.day.length ? label.words : label.day, y })
+          const box = textBox({
+            ...label,
+            text: label.words.length > label.day.length ? label.words : label.day,
+            y,
+          })
           return label.dayY > courseY || x + 8 < box.x1 || x - 8 > box.x2
         }),
       )

@@ -39,7 +39,12 @@ export function PassageFixes({
             className: 'passage-fix',
             tabIndex: i === current ? 0 : -1,
             'aria-label': markWords(mark, view),
-            style: { left: mark.x - edges.left, top: mark.y - target / 2, width: edges.left + edges.right, height: target },
+            style: {
+              left: mark.x - edges.left,
+              top: mark.y - target / 2,
+              width: edges.left + edges.right,
+              height: target,
+            },
             onFocus: () => {
               setStop(i)
               setNamed(i)
@@ -90,10 +95,15 @@ function reach(marks: readonly CourseMark[], i: number): { left: number; right: 
   if (!mark) return { left: half, right: half }
   const beside = marks.filter((other) => other !== mark && Math.abs(other.y - mark.y) < target)
   const gap = (side: -1 | 1) =>
-    Math.min(half, ...beside.filter((o) => Math.sign(o.x - mark.x) === side).map((o) => Math.abs(o.x - mark.x) / 2))
+    Math.min(
+      half,
+      ...beside.filter((o) => Math.sign(o.x - mark.x) === side).map((o) => Math.abs(o.x - mark.x) / 2),
+    )
   return { left: gap(-1), right: gap(1) }
 }
 
 function tipPlace(mark: CourseMark) {
-  return mark.x > 320 ? { left: mark.x - 266, top: mark.y + 16 } : { left: Math.max(2, mark.x - 6), top: mark.y + 16 }
+  return mark.x > 320
+    ? { left: mark.x - 266, top: mark.y + 16 }
+    : { left: Math.max(2, mark.x - 6), top: mark.y + 16 }
 }

@@ -1,6 +1,6 @@
 import type { StepState } from '../step-mark.tsx'
 import type { DayScale } from './day-scale.ts'
-import { daysBetween } from './day-words.ts'
+import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import type { PassageFix, PassageLeg, PassageView } from './passage-view.ts'
 
 export type PassageSize = 'roomy' | 'close' | 'case'
@@ -150,7 +150,13 @@ function layTexts(
     if (mark.state !== 'overdue' || !late) continue
     const words = `${mark.fixes[0]?.name}, ${late}`
     const left = mark.x - 12 - words.length * letterPx < 0
-    place({ x: left ? 2 : mark.x - 12, y: y - rise, text: words, anchor: left ? 'start' : 'end', kind: 'late' })
+    place({
+      x: left ? 2 : mark.x - 12,
+      y: y - rise,
+      text: words,
+      anchor: left ? 'start' : 'end',
+      kind: 'late',
+    })
   }
   for (const old of oldLegs) {
     if (old.leg.endWords) {
@@ -160,7 +166,13 @@ function layTexts(
   for (const note of view.notes) {
     const x = scale.x(note.on)
     const left = x + 7 - note.words.length * letterPx < 0
-    place({ x: left ? 2 : x + 7, y: y - rise + 1, text: note.words, anchor: left ? 'start' : 'end', kind: 'note' })
+    place({
+      x: left ? 2 : x + 7,
+      y: y - rise + 1,
+      text: note.words,
+      anchor: left ? 'start' : 'end',
+      kind: 'note',
+    })
   }
   if (size === 'close') return texts
   for (const leg of view.legs) {

@@ -2,7 +2,8 @@ import { Link } from 'react-router-dom'
 import { passageWords } from '../../../shared/messages/passage.ts'
 import { classNames } from '../class-names.ts'
 import { StepPicture } from '../step-mark.tsx'
-import { daysBetween, shortDay } from './day-words.ts'
+import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
+import { shortDay } from '../day-words.ts'
 import { stateWords } from './passage-words.ts'
 import type { PassageFix, PassageView } from './passage-view.ts'
 
@@ -13,7 +14,10 @@ export function PassageTable({ view }: { view: PassageView }) {
   const steps = [...leg.fixes].sort((a, b) => daysBetween(b.on, a.on))
   return (
     <div className="table-scroll">
-      <table className="data-table is-close" aria-label={passageWords.stepsTable({ name: `${view.number} ${view.name}` })}>
+      <table
+        className="data-table is-close"
+        aria-label={passageWords.stepsTable({ name: `${view.number} ${view.name}` })}
+      >
         <thead>
           <tr>
             <th scope="col">

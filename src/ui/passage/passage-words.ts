@@ -1,6 +1,7 @@
 import { passageWords } from '../../../shared/messages/passage.ts'
 import type { StepState } from '../step-mark.tsx'
-import { daysBetween, longDay, shortDay } from './day-words.ts'
+import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
+import { longDay, shortDay } from '../day-words.ts'
 import type { CourseMark } from './passage-geometry.ts'
 import type { PassageFix, PassageView } from './passage-view.ts'
 
@@ -29,7 +30,9 @@ export function fixWords(fix: PassageFix, dayZero: string): string {
 export function markWords(mark: CourseMark, view: PassageView): string {
   const dayZero = view.legs.find((leg) => leg.fixes.includes(mark.fixes[0] as PassageFix))?.from ?? view.today
   const each = mark.fixes.map((fix) => fixWords(fix, dayZero))
-  return each.length === 1 ? (each[0] ?? '') : `${passageWords.stepsTogether({ count: each.length })}: ${each.join('; ')}`
+  return each.length === 1
+    ? (each[0] ?? '')
+    : `${passageWords.stepsTogether({ count: each.length })}: ${each.join('; ')}`
 }
 
 /** What the drawing says, for who does not see it: number, animals, day and length, due and overdue steps, harbour. */
@@ -45,8 +48,7 @@ export function passageSummary(view: PassageView): string {
     view.day === null ? passageWords.held : passageWords.dayOf({ day: view.day, length: view.lengthDays }),
     listed('overdue'),
     listed('due'),
-    view.held ??
-      (view.harbour ? `${passageWords.earliestClearance} ${shortDay(view.harbour.on)}` : ''),
+    view.held ?? (view.harbour ? `${passageWords.earliestClearance} ${shortDay(view.harbour.on)}` : ''),
   ]
     .filter(Boolean)
     .join('. ')
@@ -56,6 +58,11 @@ export function passageSummary(view: PassageView): string {
 export function harbourWords(view: PassageView): string {
   if (!view.harbour) return ''
   const days = daysBetween(view.today, view.harbour.on)
-  if (days <= 0) return view.harbour.allMet ? passageWords.readyToClear : days < 0 ? passageWords.passed : passageWords.today
+  if (days <= 0)
+    return view.harbour.allMet
+      ? passageWords.readyToClear
+      : days < 0
+        ? passageWords.passed
+        : passageWords.today
   return passageWords.inDays({ days })
 }

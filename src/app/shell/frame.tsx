@@ -1,0 +1,78 @@
+import { useEffect, useRef, useState } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import { Anchor } from 'lucide-react'
+import { Navigate, Outlet, useLocation, useNavigate } from 'react-router-dom'
+import { frameWords } from '../../../shared/messages/frame.ts'
+import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
+import { useFacilityNow } from '../../lib/facility-time.ts'
+import { meQuery } from '../../lib/me.ts'
+import { paths } from '../../lib/paths.ts'
+import { useSingleKeys } from '../../lib/preferences.ts'
+import { Banner } from '../../ui/banner.tsx'
+import { FindDialog } from '../../ui/find-dialog.tsx'
+import { HourRuler } from '../../ui/hour-ruler.tsx'
+import { KeyListDialog } from '../../ui/key-list-dialog.tsx'
+import { HoursAboveContext } from '../../ui/sheet.tsx'
+import { SingleKeysContext } from '../../ui/single-keys-context.ts'
+import { SkipLink } from '../../ui/skip-link.tsx'
+import { useSheetKeys } from '../../ui/use-sheet-keys.ts'
+import { sheets } from '../sheets.ts'
+import { Bridge } from './bridge.tsx'
+import { useDueToday } from './due-today.ts'
+
+/** The frame around every sheet. When the session ends, wherever that is noticed, it leads to sign-in and back. */
+export function Frame() {
+  const { data: me } = useQuery(meQuery)
+  const location = useLocation()
+  if (!me) return <Navigate to={paths.signIn(location.pathname + location.search)} replace />
+  if (me.mustChangePassword) return <Navigate to={paths.newPassword()} replace />
+  return <SignedInFrame me={me} />
+}
+
+function SignedInFrame({ me }: { me: Me }) {
+  const [front, setFront] = useState<'find' | 'keys' | null>(null)
+  const navigate = useNavigate()
+  const now = useFacilityNow(me.facility.zone)
+  const due = useDueToday()
+  const singleKeys = useSingleKeys()
+  const { pathname } = useLocation()
+  const arrived = useRef(pathname)
+
+  useSheetKeys({
+    singleKeys,
+    onSheet: (number) => {
+      const sheet = sheets()[number - 1]
+      if (sheet) void navigate(sheet.to)
+    },
+    onFind: () => setFront('find'),
+    onKeyList: () => setFront('keys'),
+  })
+
+  useEffect(() => {
+    // a new sheet is read from its beginning; the first one after loading is, without help
+    if (arrived.current === pathname) return
+    arrived.current = pathname
+    document.getElementById('chart')?.focus({ preventScroll: true })
+    window.scrollTo(0, 0)
+  }, [pathname])
+
+  return (
+    <SingleKeysContext value={singleKeys}>
+      <HoursAboveContext value={due !== null}>
+        <div className="page">
+          <SkipLink />
+          <Bridge now={now} onFind={() => setFront('find')} onKeyList={() => setFront('keys')} />
+          <div>
+            {me.facility.demo ? <Banner icon={Anchor}>{frameWords.demo}</Banner> : null}
+            {due === null ? null : <HourRuler items={due} now={now.time} nowMinute={now.minute} />}
+          </div>
+          <Outlet />
+        </div>
+        {front === 'find' ? (
+          <FindDialog onBack={() => setFront(null)} unavailable={frameWords.notHereYetFind} />
+        ) : null}
+        {front === 'keys' ? <KeyListDialog onBack={() => setFront(null)} /> : null}
+      </HoursAboveContext>
+    </SingleKeysContext>
+  )
+}

@@ -1,0 +1,53 @@
+/** Every address of the application, in one place. Numbers and codes from outside are encoded here. */
+const part = encodeURIComponent
+
+export const paths = {
+  today: () => '/',
+  signIn: (then?: string) => (then && then !== '/' ? `/sign-in?then=${part(then)}` : '/sign-in'),
+  newPassword: () => '/new-password',
+  notInThisVersion: (sheet: string) => `/not-in-this-version/${part(sheet)}`,
+  parts: () => '/parts',
+
+  animals: () => '/animals',
+  animal: (accession: string) => `/animals/${part(accession)}`,
+
+  water: () => '/water',
+  enclosure: (code: string) => `/enclosures/${part(code)}`,
+  system: (code: string) => `/systems/${part(code)}`,
+
+  quarantine: () => '/quarantine',
+  quarantineCase: (number: string) => `/quarantine/${part(number)}`,
+  rounds: () => '/rounds',
+
+  orders: () => '/orders',
+  newOrder: () => '/orders/new',
+  order: (number: string) => `/orders/${part(number)}`,
+  orderSheet: (number: string) => `/orders/${part(number)}/sheet`,
+
+  pharmacy: () => '/pharmacy',
+  formulary: () => '/pharmacy/formulary',
+  stock: () => '/pharmacy/stock',
+  controlled: () => '/pharmacy/controlled',
+
+  register: () => '/register',
+  permits: () => '/register/permits',
+  exports: () => '/register/exports',
+  imports: () => '/register/imports',
+
+  bench: () => '/bench',
+  calculator: (name: string) => `/bench/${part(name)}`,
+
+  samples: () => '/samples',
+  tracing: () => '/tracing',
+  reports: () => '/reports',
+  check: (fingerprint: string) => `/check/${part(fingerprint)}`,
+  tankLabel: (code: string) => `/e/${part(code)}`,
+
+  settings: () => '/settings',
+  ownSettings: () => '/settings/own',
+  facility: () => '/settings/facility',
+  people: () => '/settings/people',
+  newPerson: () => '/settings/people/new',
+  person: (id: string) => `/settings/people/${part(id)}`,
+  audit: () => '/settings/audit',
+} as const

@@ -1,0 +1,32 @@
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query'
+import { isProblem } from './problem-error.ts'
+
+/** The key under which the client keeps who is signed in. */
+export const meKey = ['me'] as const
+
+/** Server state lives here and nowhere else. A session that has ended anywhere sends the whole client to sign-in. */
+export function createQueryClient(): QueryClient {
+  const client: QueryClient = new QueryClient({
+    queryCache: new QueryCache({ onError: noticeSession }),
+    mutationCache: new MutationCache({ onError: noticeSession }),
+    defaultOptions: {
+      queries: {
+        staleTime: 15_000,
+        retry: (failures, error) => failures < 2 && mayHeal(error),
+        retryDelay: (attempt) => Math.min(4000, 500 * 2 ** attempt),
+        throwOnError: false,
+      },
+      mutations: { retry: false },
+    },
+  })
+  function noticeSession(error: unknown): void {
+    if (isProblem(error, 'not-signed-in')) client.setQueryData(meKey, null)
+    if (isProblem(error, 'password-change-required')) void client.invalidateQueries({ queryKey: meKey })
+  }
+  return client
+}
+
+/** Whether the same request may succeed by itself a moment later. A refusal will not. */
+function mayHeal(error: unknown): boolean {
+  return isProblem(error) && (error.noAnswer || error.status === 503)
+}
