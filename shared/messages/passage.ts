@@ -26,6 +26,7 @@ export const passageWords = defineMessages({
   courseOf: (p: { name: string }) => `Steps of ${p.name}`,
   stepsTable: (p: { name: string }) => `Protocol steps of ${p.name}`,
   day: 'Day',
+  dayNumber: (p: { day: number }) => `day ${p.day}`,
   date: 'Date',
   step: 'Step',
   state: 'State',

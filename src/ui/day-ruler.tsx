@@ -31,7 +31,7 @@ export function DayRuler({ scale, today, y }: { scale: DayScale; today: string; 
         />
       ))}
       {rulerDates(scale)
-        .filter(({ x }) => Math.abs(x + 16 - boxX) > 52)
+        .filter(({ x }) => x + dateRoom < boxX - 38 || x > boxX + 38)
         .map(({ date, x, bold }) => (
           <g key={date}>
             <path d={`M${x} ${y + 9}v5`} className="p-line" />

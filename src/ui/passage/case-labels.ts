@@ -22,6 +22,7 @@ export function layCaseLabels(
   marks: readonly CourseMark[],
   y: number,
   width: number,
+  nowX: number,
   dayWords: (day: number) => string,
 ): CaseLabel[] {
   const dayZero = view.legs[view.legs.length - 1]?.from ?? view.today
@@ -35,8 +36,7 @@ export function layCaseLabels(
     const words = mark.fixes.length > 1 ? '' : (fix.late ?? fix.short ?? fix.name)
     const day = dayWords(daysBetween(dayZero, fix.on))
     const half = (Math.max(words.length, day.length) * 5.4) / 2
-    const anchor = mark.x - half < 2 ? 'start' : mark.x + half > width - 2 ? 'end' : 'middle'
-    const x = anchor === 'start' ? 3 : anchor === 'end' ? width - 3 : mark.x
+    const { x, anchor } = placeBeside(mark.x, half, width, nowX)
     for (const [dayY, wordsY] of [
       [y + 22, y + 35],
       [y - 26, y - 13],
@@ -52,4 +52,14 @@ export function layCaseLabels(
     }
   }
   return labels
+}
+
+/** Centred on its mark, but never over the edge of the drawing or across the line of now. */
+function placeBeside(x: number, half: number, width: number, nowX: number): Pick<CaseLabel, 'x' | 'anchor'> {
+  if (x - half < nowX && x + half > nowX) {
+    return x <= nowX + 1 ? { x: nowX - 10, anchor: 'end' } : { x: Math.max(nowX + 5, x - 8), anchor: 'start' }
+  }
+  if (x - half < 2) return { x: 3, anchor: 'start' }
+  if (x + half > width - 2) return { x: width - 3, anchor: 'end' }
+  return { x, anchor: 'middle' }
 }

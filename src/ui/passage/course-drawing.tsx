@@ -51,7 +51,7 @@ export function CourseDrawing({
       {course.texts.map((text) => (
         <CourseWords key={`${text.kind} ${text.x} ${text.text}`} text={text} />
       ))}
-      {course.marks.map((mark) => (
+      {inFront(course.marks).map((mark) => (
         <MergedMark key={`${mark.x} ${mark.y}`} mark={mark} small={!inCase} />
       ))}
       {course.shipX === null ? null : (
@@ -68,6 +68,12 @@ export function CourseDrawing({
       )}
     </g>
   )
+}
+
+/** What is due stands in front where marks overlap. */
+function inFront(marks: readonly CourseMark[]): CourseMark[] {
+  const due = (mark: CourseMark) => mark.state === 'due' || mark.state === 'overdue'
+  return [...marks.filter((mark) => !due(mark)), ...marks.filter(due)]
 }
 
 /** Two leaning strokes: the clock was restarted here. */

@@ -1,5 +1,6 @@
 import { classNames } from '../class-names.ts'
 import { shortDay } from '../day-words.ts'
+import { letterPx } from './passage-geometry.ts'
 import type { CourseGeometry } from './passage-geometry.ts'
 import { harbourWords } from './passage-words.ts'
 import type { PassageView } from './passage-view.ts'
@@ -22,8 +23,13 @@ export function HarbourLabel({
 }) {
   const { y } = course
   if (course.heldX !== null) {
+    const fits = course.heldX + 12 + (view.held ?? '').length * letterPx < width
     return (
-      <text x={course.heldX + 12} y={y + 4} className="s-11 s-n s-2">
+      <text
+        x={fits ? course.heldX + 12 : width - 4}
+        y={fits ? y + 4 : y + 24}
+        className={classNames('s-11 s-n s-2', !fits && 'end')}
+      >
         {view.held}
       </text>
     )

@@ -8,11 +8,11 @@ import { dayScale, weekStarts } from './day-scale.ts'
 import type { DayScale } from './day-scale.ts'
 import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import { shortDay } from '../day-words.ts'
-import { layPassage, textBox } from './passage-geometry.ts'
+import { layPassage, overlap, textBox } from './passage-geometry.ts'
 import type { CourseGeometry, OldLeg } from './passage-geometry.ts'
 import { PassageFixes } from './passage-fixes.tsx'
 import { harbourWords, passageSummary } from './passage-words.ts'
-import type { PassageView } from './passage-view.ts'
+import type { PassageLeg, PassageView } from './passage-view.ts'
 
 const water = 200
 const rulerHeight = 40
@@ -34,12 +34,8 @@ export function PassageCase({
   const [frame, width] = useWidth<HTMLDivElement>(1128)
   const scale = dayScale(from, until, width)
   const course = layPassage(view, scale, courseY, 'case')
-  const labels = layCaseLabels(
-    view,
-    course.marks,
-    courseY,
-    width,
-    (day) => passageWords.day.toLowerCase() + ' ' + day,
+  const labels = layCaseLabels(view, course.marks, courseY, width, course.nowX, (day) =>
+    passageWords.dayNumber({ day }),
   )
   const shoreX = course.harbourX === null ? null : course.harbourX + 13
 
@@ -110,9 +106,9 @@ function OldLegWords({ old, first, scale }: { old: OldLeg; first: boolean; scale
       <text x={Math.max(2, old.x1 - 8)} y={old.y - 30} className="s-12 s-2">
         {first ? passageWords.firstLeg({ days }) : passageWords.earlierLeg({ days })}
       </text>
-      {leg.fixes.map((fix) => (
-        <text key={fix.id} x={scale.x(fix.on)} y={old.y - 13} className="s-11 s-n s-2 mid">
-          {fix.short ?? ''}
+      {shownSteps(leg, scale, old.y - 13).map((step) => (
+        <text key={step.key} x={step.x} y={step.y} className="s-11 s-n s-2 mid">
+          {step.text}
         </text>
       ))}
       {leg.until ? (
@@ -127,6 +123,17 @@ function OldLegWords({ old, first, scale }: { old: OldLeg; first: boolean; scale
       ) : null}
     </>
   )
+}
+
+/** Short names of the steps of an earlier leg, as far as they have room. */
+function shownSteps(leg: PassageLeg, scale: DayScale, y: number) {
+  const shown: { key: string; x: number; y: number; text: string; anchor: 'middle' }[] = []
+  for (const fix of leg.fixes) {
+    const step = { key: fix.id, x: scale.x(fix.on), y, text: fix.short ?? '', anchor: 'middle' as const }
+    const box = textBox(step)
+    if (step.text && box.x1 > 0 && shown.every((other) => !overlap(box, textBox(other)))) shown.push(step)
+  }
+  return shown
 }
 
 /** Animals at each count, over the running course and under the earlier one, where no label stands. */
@@ -170,31 +177,41 @@ function Soundings({
   )
 }
 
-/** On the land: when it may be cleared at the earliest; or why nothing is set. */
+/** On the land: when it may be cleared at the earliest; or why nothing is set. On a narrow drawing under the course. */
 function HarbourWords({ view, course, width }: { view: PassageView; course: CourseGeometry; width: number }) {
   if (course.heldX !== null) {
     return (
-      <text x={course.heldX + 14} y={courseY + 4} className="s-12 s-2">
+      <text x={width - 6} y={water - 8} className="s-12 s-2 end">
         {view.held}
       </text>
     )
   }
   if (!view.harbour || course.harbourX === null) return null
   const days = daysBetween(view.today, view.harbour.on)
-  const left = course.harbourX + 160 > width
-  const x = left ? course.harbourX - 16 : course.harbourX + 42
-  const look = left ? 'end' : undefined
-  const top = left ? courseY - 44 : courseY - 4
+  const date = shortDay(view.harbour.on)
+  const colour = view.harbour.allMet && days <= 0 && 's-g'
+  const toRun = days > 0 ? passageWords.daysToRun({ days }) : harbourWords(view)
+  const x = course.harbourX + 42
+  if (x + 118 > width) {
+    return (
+      <text x={width - 6} y={water - 8} className="end">
+        <tspan className={classNames('s-13 s-b', colour)}>{date}</tspan>
+        <tspan className="s-12 s-2" dx="5">
+          {`${passageWords.earliestClearance}, ${toRun}`}
+        </tspan>
+      </text>
+    )
+  }
   return (
     <>
-      <text x={x} y={top} className={classNames('s-18 s-b', look, view.harbour.allMet && days <= 0 && 's-g')}>
-        {shortDay(view.harbour.on)}
+      <text x={x} y={courseY - 4} className={classNames('s-18 s-b', colour)}>
+        {date}
       </text>
-      <text x={x} y={top + 16} className={classNames('s-12 s-2', look)}>
+      <text x={x} y={courseY + 12} className="s-12 s-2">
         {passageWords.earliestClearance}
       </text>
-      <text x={x} y={top + 31} className={classNames('s-12 s-2', look)}>
-        {days > 0 ? passageWords.daysToRun({ days }) : harbourWords(view)}
+      <text x={x} y={courseY + 27} className="s-12 s-2">
+        {toRun}
       </text>
     </>
   )

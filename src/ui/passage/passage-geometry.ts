@@ -51,7 +51,8 @@ export interface CourseGeometry {
 }
 
 const mergeWithin = 10
-const letterPx = 5.4
+/** About how wide a letter of the narrow 11 px text is. */
+export const letterPx = 5.4
 
 /** How far the course of the leg before stands above the running one. */
 const oldLegRise: Record<PassageSize, number> = { roomy: 14, close: 11, case: 74 }
@@ -139,11 +140,13 @@ function layTexts(
   size: PassageSize,
 ): CourseText[] {
   const texts: CourseText[] = []
+  const harbour = view.harbour && !view.held ? scale.x(view.harbour.on) : Infinity
+  const land: Box = { x1: harbour + 16, x2: harbour + 110, y1: y - 14, y2: y + 16 }
   const rise = size === 'close' ? 9 : 11
   const place = (text: CourseText) => {
     const box = textBox(text)
     const fits = box.x1 >= 0 && box.x2 <= scale.width
-    if (fits && texts.every((other) => !overlap(box, textBox(other)))) texts.push(text)
+    if (fits && !overlap(box, land) && texts.every((other) => !overlap(box, textBox(other)))) texts.push(text)
   }
   for (const mark of marks) {
     const late = mark.fixes[0]?.late
