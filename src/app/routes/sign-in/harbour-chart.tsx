@@ -28,7 +28,7 @@ export function HarbourChart({ children }: { children: ReactNode }) {
           {parallels.map((y) => (
             <path key={y} d={`M0 ${y}H${width}`} className="chart-grid" />
           ))}
-          {soundings.map(([x, y, metres]) => (
+          {soundings.map(({ x, y, metres }) => (
             <Sounding key={`${x} ${y}`} x={x} y={y} metres={metres} />
           ))}
           <Course />
