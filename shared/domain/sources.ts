@@ -66,6 +66,13 @@ export const sources = {
     citation: 'Noga 2010, Fish Disease: Diagnosis and Treatment, 2nd edition, as quoted',
     mark: 'V2',
   },
+
+  'quarantine-practice': {
+    citation:
+      'Public quarantine standard of an accreditation body: at least 30 days under veterinary supervision; further ' +
+      'animals of the same kind entering the area start the period again',
+    mark: 'V',
+  },
 } as const satisfies Record<string, Source>
 
 export type SourceKey = keyof typeof sources
