@@ -1,7 +1,7 @@
 import { checkSetting, itemsOf } from '../../../shared/domain/settings/check-setting.ts'
 import { settingKeys, settings } from '../../../shared/domain/settings/settings.ts'
 import type { SettingKey } from '../../../shared/domain/settings/settings.ts'
-import { facilityDateOf } from '../../../shared/domain/time/facility-date-of.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { settingNames, settingRefusals } from '../../../shared/messages/settings.ts'
 import type { Setting } from '../../../shared/contracts/facility.contract.ts'
 import type { Ids } from '../../platform/ids.ts'

@@ -1,4 +1,4 @@
-import type { LocalDate } from '../time/facility-date-of.ts'
+import type { FacilityDate } from '../time/instant.ts'
 
 export type LicenceState = 'valid' | 'not-yet' | 'expired' | 'void' | 'not-accepted-here'
 
@@ -10,8 +10,8 @@ export type LicenceState = 'valid' | 'not-yet' | 'expired' | 'void' | 'not-accep
  * @param accepted       jurisdictions the facility accepts, compared without regard to case
  */
 export function licenceState(
-  licence: { jurisdiction: string; validFrom: LocalDate; validUntil: LocalDate; void: boolean },
-  on: LocalDate,
+  licence: { jurisdiction: string; validFrom: FacilityDate; validUntil: FacilityDate; void: boolean },
+  on: FacilityDate,
   accepted: readonly string[],
 ): LicenceState {
   if (licence.void) return 'void'
