@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { projectFiles, projectText } from '../support/project-files.ts'
+import { filesByGit, filesByWalking, projectFiles, projectText } from '../support/project-files.ts'
 
 // Words that must not stand anywhere are put together here, so that this file does not hold them.
 const word = (...parts: string[]) => parts.join('')
@@ -20,6 +20,12 @@ function linesWith(pattern: RegExp, among: readonly string[]): string[] {
 }
 
 describe('what the repository holds', () => {
+  it('is found without git as with it', () => {
+    const walked = new Set(filesByWalking())
+    expect((filesByGit() ?? projectFiles()).filter((file) => !walked.has(file))).toEqual([])
+    expect([...walked].filter((file) => /^(node_modules|dist|\.data|\.git)\//.test(file))).toEqual([])
+  })
+
   it('at the top, only what has its place there', () => {
     const allowed = [
       ...[

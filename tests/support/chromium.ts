@@ -46,6 +46,19 @@ export async function newSession(browser: Browser, options: SessionOptions): Pro
     hasTouch: width < 600,
     reducedMotion: 'reduce',
   })
+  const troubles = watchForTroubles(context, expectedErrors)
+  onTestFinished(async () => {
+    await context.close()
+    expect(troubles, 'errors in the browser').toEqual([])
+  })
+  return { context, page: await context.newPage() }
+}
+
+/** What goes wrong in the pages of a context, as it comes: one line each. */
+export function watchForTroubles(
+  context: BrowserContext,
+  expectedErrors: readonly RegExp[] = [],
+): readonly string[] {
   const troubles: string[] = []
   const note = (trouble: string) => {
     if (!expectedErrors.some((expected) => expected.test(trouble))) troubles.push(trouble)
@@ -59,9 +72,5 @@ export async function newSession(browser: Browser, options: SessionOptions): Pro
     const onThisMachine = ['127.0.0.1', 'localhost'].includes(hostname) || !protocol.startsWith('http')
     if (!onThisMachine) note(`request to another machine: ${request.url()}`)
   })
-  onTestFinished(async () => {
-    await context.close()
-    expect(troubles, 'errors in the browser').toEqual([])
-  })
-  return { context, page: await context.newPage() }
+  return troubles
 }
