@@ -1,12 +1,16 @@
 import type { Contract } from './contract.ts'
 import * as audit from './audit.contract.ts'
+import * as enclosures from './enclosures.contract.ts'
 import * as facility from './facility.contract.ts'
 import * as people from './people.contract.ts'
 import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
+import * as water from './water.contract.ts'
+import * as waterMap from './water-map.contract.ts'
+import * as waterVolumes from './water-volumes.contract.ts'
 
 /** Modules that hold contracts; a new feature adds its own here. */
-const modules = [signIn, people, facility, audit, signing]
+const modules = [signIn, people, facility, audit, signing, enclosures, water, waterMap, waterVolumes]
 
 const isContract = (value: unknown): value is Contract =>
   typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'reply' in value

@@ -36,6 +36,16 @@ export const problemStatus = {
   'already-confirmed': 409,
   'another-person-needed': 403,
   'licence-not-valid': 403,
+  'kind-has-no-water': 409,
+  'belongs-to-enclosure': 409,
+  'same-body-twice': 422,
+  'not-one-water': 409,
+  'already-void': 409,
+  'isolation-ended': 409,
+  'isolation-needed': 409,
+  'isolation-not-standing': 409,
+  'valve-state-unknown': 409,
+  'volume-covers-other-water': 409,
   'outside-working-order': 500,
 } as const satisfies Record<string, number>
 

@@ -6,6 +6,23 @@ const byConstraint: Record<string, ProblemCode> = {
   uq_people_email: 'email-already-used',
   ck_licences_period: 'period-reversed',
   uq_setting_confirmations_version: 'already-confirmed',
+  uq_enclosures_code: 'number-already-used',
+  uq_water_bodies_code: 'number-already-used',
+  uq_connections_code: 'number-already-used',
+  uq_life_support_units_code: 'number-already-used',
+  ck_water_bodies_in_use: 'period-reversed',
+  ck_connections_in_use: 'period-reversed',
+  ck_life_support_units_in_use: 'period-reversed',
+  ck_connections_two_bodies: 'same-body-twice',
+  uq_isolation_ends_isolation: 'isolation-ended',
+  uq_volume_confirmations_determination: 'already-confirmed',
+  ck_volume_confirmations_another_person: 'another-person-needed',
+  uq_water_voids_reading: 'already-void',
+  uq_water_voids_event: 'already-void',
+  uq_water_voids_connection_state: 'already-void',
+  uq_water_voids_life_support_state: 'already-void',
+  uq_water_voids_determination: 'already-void',
+  uq_water_voids_isolation: 'already-void',
 }
 
 /** The problem for a broken constraint; null when none is foreseen, which is a bug and answers 500. */

@@ -1,0 +1,180 @@
+import type { ConnectionState, WaterMap } from '../../../shared/domain/connections/water-map.ts'
+import type { VolumeMethod } from '../../../shared/domain/connections/volume-determination.ts'
+import type { VolumeChoiceRefusal } from '../../../shared/domain/connections/choose-volume.ts'
+import { findVolumeMismatches } from '../../../shared/domain/connections/volume-determination.ts'
+import type { VolumeMismatch } from '../../../shared/domain/connections/volume-determination.ts'
+import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
+import { judgeReading } from '../../../shared/domain/readings/judge-reading.ts'
+import type { ReadingJudgement } from '../../../shared/domain/readings/judge-reading.ts'
+import type { PhScale, ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
+import type { Refusal } from '../../../shared/domain/result.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import type { Db } from '../../platform/database/db.ts'
+import { placeReads } from '../enclosures/index.ts'
+import { readWholeWaterMap } from './read-water-map.ts'
+import { determinationOf } from './volume-now.ts'
+import { readEnclosureWater } from './water-at.ts'
+import type { EnclosureWater } from './water-at.ts'
+import { rangeOf } from './water.present.ts'
+
+/** A volume determination as a dose, a caution or a signature needs it. */
+export interface VolumeFact {
+  id: string
+  netVolumeLitres: number
+  grossVolumeLitres: number | null
+  /** Relative error, percent of the net volume, one side */
+  errorPercent: number | null
+  method: VolumeMethod
+  displacementSubtracted: boolean
+  /** Facility date and instant of the measurement */
+  measuredOn: string
+  measuredAt: string
+  /** Confirmed by a second person by the instant asked about */
+  confirmed: boolean
+  holdsForThisValveState: boolean
+  /** Why it does not hold, in codes; empty when it holds */
+  mismatches: VolumeMismatch[]
+  waterBodyIds: string[]
+  /** Set when it covers a part of the joined water, under a recorded and tested isolation */
+  isolationId: string | null
+}
+
+/** The newest reading of one parameter, and how old it was. */
+export interface ReadingFact {
+  id: string
+  parameter: ReadingParameter
+  value: string
+  unit: UnitCode
+  below: boolean
+  scale: PhScale | null
+  canonicalValue: number
+  canonicalUnit: UnitCode
+  at: string
+  ageMinutes: number
+  waterBodyId: string
+  waterBodyCode: string
+  judgement: ReadingJudgement
+}
+
+/** The water of an enclosure at an instant: what cautions, doses, clocks and tracing ask for. */
+export interface WaterFacts {
+  at: string
+  enclosureId: string
+  enclosureCode: string
+  bodies: { id: string; code: string; kind: 'enclosure' | 'sump' | 'loop'; enclosureId: string | null }[]
+  /** Enclosures whose animals share this water, itself among them */
+  enclosures: { id: string; code: string; name: string; boundary: string | null }[]
+  connections: {
+    id: string
+    code: string
+    kind: 'valve' | 'pump'
+    state: ConnectionState | 'unknown'
+    inside: boolean
+  }[]
+  unknownConnectionIds: string[]
+  /** The one to dose by when `confirmed` and `holdsForThisValveState`; else the nearest there is; null when none */
+  volume: VolumeFact | null
+  /** Why no volume can be used; null when one can */
+  volumeRefusal: Refusal<VolumeChoiceRefusal> | null
+  latestReadings: ReadingFact[]
+  lifeSupport: {
+    id: string
+    code: string
+    kind: LifeSupportKind
+    waterBodyId: string
+    /** null: nobody ever recorded it */
+    on: boolean | null
+    since: string | null
+  }[]
+}
+
+function volumeFact(found: EnclosureWater): VolumeFact | null {
+  const { row, usable, holds, isolationId } = found.volume
+  if (!row) return null
+  const confirmed = row.confirmed_at !== null && row.confirmed_at <= found.at
+  return {
+    id: row.id,
+    netVolumeLitres: row.net_volume_litres,
+    grossVolumeLitres: row.gross_volume_litres,
+    errorPercent: row.error_percent,
+    method: row.method,
+    displacementSubtracted: row.displacement_subtracted,
+    measuredOn: row.happened_on,
+    measuredAt: row.happened_at.toISOString(),
+    confirmed,
+    holdsForThisValveState: holds,
+    mismatches: holds ? [] : findVolumeMismatches(determinationOf(row), found.water),
+    waterBodyIds: row.water_body_ids,
+    isolationId: usable ? isolationId : row.isolation_id,
+  }
+}
+
+function factsOf(found: EnclosureWater): WaterFacts {
+  const { enclosure, water, at } = found
+  const byConnection = new Map(found.map.connections.map((row) => [row.id, row]))
+  return {
+    at: at.toISOString(),
+    enclosureId: enclosure.id,
+    enclosureCode: enclosure.code,
+    bodies: found.bodies.map(({ id, code, kind, enclosure_id }) => ({ id, code, kind, enclosureId: enclosure_id })),
+    enclosures: found.enclosures.map(({ id, code, name, boundary }) => ({ id, code, name, boundary })),
+    connections: water.connections.flatMap(({ connectionId, state, inside }) => {
+      const row = byConnection.get(connectionId)
+      return row ? [{ id: row.id, code: row.code, kind: row.kind, state, inside }] : []
+    }),
+    unknownConnectionIds: water.unknownConnectionIds,
+    volume: volumeFact(found),
+    volumeRefusal: found.volume.refusal,
+    latestReadings: found.latest.map((row) => ({
+      id: row.id,
+      parameter: row.parameter,
+      value: row.entered_value,
+      unit: row.entered_unit,
+      below: row.below,
+      scale: row.scale,
+      canonicalValue: row.canonical_value,
+      canonicalUnit: row.canonical_unit,
+      at: row.happened_at.toISOString(),
+      ageMinutes: (at.getTime() - row.happened_at.getTime()) / 60_000,
+      waterBodyId: row.water_body_id,
+      waterBodyCode: row.water_body_code,
+      judgement: judgeReading(
+        { value: row.canonical_value, unit: row.canonical_unit, below: row.below },
+        rangeOf(found.ranges.find((range) => range.parameter === row.parameter)),
+      ),
+    })),
+    lifeSupport: found.lifeSupport.map((row) => ({
+      id: row.id,
+      code: row.code,
+      kind: row.kind,
+      waterBodyId: row.water_body_id,
+      on: row.is_on,
+      since: row.since?.toISOString() ?? null,
+    })),
+  }
+}
+
+/** Narrow answers about water; each takes the transaction of the asker, or reads what is committed. */
+export function createWaterQuestions(parts: { dataSource: Db }) {
+  return {
+    /**
+     * The water that an enclosure shares at an instant, its volume, newest readings and machines.
+     * @returns null when there is no such enclosure, or it has no water then (a land area)
+     */
+    async connectedWaterAt(
+      enclosureId: string,
+      at: Date,
+      db: Db = parts.dataSource,
+    ): Promise<WaterFacts | null> {
+      const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
+      const found = enclosure && (await readEnclosureWater(db, enclosure, at))
+      return found && factsOf(found)
+    },
+    /** The whole map with its open/shut ledger, as the engines of clocks and tracing take it. */
+    waterMap(db: Db = parts.dataSource): Promise<WaterMap> {
+      return readWholeWaterMap(db)
+    },
+  }
+}
+
+export type WaterQuestions = ReturnType<typeof createWaterQuestions>

@@ -1,0 +1,14 @@
+import { problemTitles } from '../../../shared/messages/problems.ts'
+import { Problem } from './problem.ts'
+
+const allowedAheadMs = 5 * 60_000
+
+/** The time a person gave as a Date; refused when it lies more than 5 min ahead of the server's clock. */
+export function timeNotAhead(given: string, now: Date, pointer = '/happenedAt'): Date {
+  const at = new Date(given)
+  if (at.getTime() > now.getTime() + allowedAheadMs)
+    throw new Problem('in-the-future', {
+      errors: [{ pointer, detail: problemTitles['in-the-future'], code: 'in-the-future' }],
+    })
+  return at
+}
