@@ -1,10 +1,12 @@
 import path from 'node:path'
 import type { DataSource } from 'typeorm'
 import { createAudit } from './features/audit/index.ts'
+import { createEnclosures } from './features/enclosures/index.ts'
 import { createFacility } from './features/facility/index.ts'
 import { createPeople } from './features/people/index.ts'
 import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
+import { createWater } from './features/water/index.ts'
 import type { Clock } from './platform/clock.ts'
 import { createTransactions } from './platform/database/transactions.ts'
 import { createIds } from './platform/ids.ts'
@@ -38,18 +40,24 @@ export function compose(outside: Outside) {
   const audit = createAudit(parts)
   const signer = createSigner(path.join(outside.dataFolder, 'keys'))
   const signing = createSigning({ ...parts, signer, lockout, facility: facility.service, people })
+  const enclosures = createEnclosures(parts)
+  const water = createWater({ ...parts, facility: facility.service, enclosures })
   return {
     parts,
     authenticator,
     facility,
     people,
     signing,
+    enclosures,
+    water,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
       ...facility.routes,
       ...audit.routes,
       ...signing.routes,
+      ...enclosures.routes,
+      ...water.routes,
     ],
   }
 }

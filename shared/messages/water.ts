@@ -59,6 +59,51 @@ export const volumeMethodNames = defineMessages({
   estimated: 'estimate',
 } satisfies Record<VolumeMethod, string>)
 
+export const volumeStates = defineMessages({
+  usable: 'confirmed',
+  'to-confirm': 'to be confirmed',
+  'does-not-hold': 'does not hold as the valves stand',
+  none: 'not determined',
+  'no-water': 'no water',
+})
+
+export const readingLevels = defineMessages({
+  inside: 'as wanted',
+  inner: 'outside',
+  outer: 'far outside',
+  'no-range': 'nothing wanted',
+  unknown: 'cannot be told',
+})
+
+/** Headers of lists of water, on screen and in files. */
+export const waterColumns = defineMessages({
+  code: 'Code',
+  name: 'Name',
+  area: 'Part of the house',
+  connected: 'Shares water with',
+  netVolume: 'Net volume (L)',
+  error: 'Error (%)',
+  volumeState: 'Volume',
+  lastReading: 'Last measured',
+  outside: 'Outside what is wanted',
+  off: 'Machines off',
+  happenedAt: 'Measured at',
+  happenedOn: 'Facility date',
+  water: 'Water',
+  parameter: 'Parameter',
+  value: 'Value',
+  unit: 'Unit',
+  scale: 'Scale',
+  canonical: 'Canonical value',
+  canonicalUnit: 'Canonical unit',
+  judgement: 'Against what is wanted',
+  instrument: 'Instrument',
+  note: 'Note',
+  recordedBy: 'Entered by',
+  recordedAt: 'Entered at',
+  voided: 'Struck through',
+})
+
 /** Refusals of readings and ranges that are not about the number itself. */
 export const readingRefusals = defineMessages({
   'ph-scale-missing': 'Choose the scale of the pH: NBS for electrodes set with pH 4, 7 and 10 buffers.',
@@ -83,9 +128,11 @@ export const waterDetails = defineMessages({
     `${p.codes} was joined to this water at that time. Measure it too, or record an isolation and choose it.`,
   notJoined: (p: { codes: string }) => `${p.codes} was not joined to this water at that time. Leave it out.`,
   isolationOther: 'Choose an isolation of exactly these bodies that stood when you measured.',
+  notInUseThen: 'This enclosure was not in use at that time. Check the time.',
   ownBodyMissing: 'The water of this enclosure itself has to be among the bodies.',
   errorNeeded: 'Type an error above zero for what was measured: no volume is known exactly.',
-  confirmAnother: 'You determined this volume. Ask a colleague who is a veterinarian or technician to confirm it.',
+  confirmAnother:
+    'You determined this volume. Ask a colleague who is a veterinarian or technician to confirm it.',
   onlyOwnProposal: 'Only a veterinarian or technician withdraws a volume that somebody else determined.',
   endBeforeStart: 'The isolation began later than this. Check the time.',
 })

@@ -103,7 +103,10 @@ export async function readReadings(
 }
 
 export function readReadingsById(db: Db, ids: readonly string[]): Promise<ReadingReadRow[]> {
-  return db.query(`SELECT ${readingColumns} FROM ${readingSource} WHERE r.id = ANY($1) ORDER BY r.id`, [ids])
+  return db.query(
+    `SELECT ${readingColumns} FROM ${readingSource} WHERE r.id = ANY($1::uuid[]) ORDER BY array_position($1::uuid[], r.id)`,
+    [ids],
+  )
 }
 
 export interface RangeReadRow {

@@ -92,7 +92,8 @@ export function createMeasurementsService(parts: WaterServiceParts) {
             note: reading.note ?? null,
             ...stamps,
           })
-          if (created) entered.push({ id: reading.id, parameter, ...value, below, ...(scale ? { scale } : {}) })
+          if (created)
+            entered.push({ id: reading.id, parameter, ...value, below, ...(scale ? { scale } : {}) })
         }
         if (entered.length > 0)
           tx.audit({
@@ -167,12 +168,23 @@ export function createMeasurementsService(parts: WaterServiceParts) {
         ? parseQuantity(amount, { dimension: 'volume', above: 0, max: 100_000_000, field: 'amount' })
         : null
       if (litres && !litres.ok)
-        throw refusedInput('/amount', sayNumberRefusal(litres.refusal, waterDetails.amountField), litres.refusal.code)
+        throw refusedInput(
+          '/amount',
+          sayNumberRefusal(litres.refusal, waterDetails.amountField),
+          litres.refusal.code,
+        )
       const share = sharePercent
-        ? parseQuantity({ value: sharePercent, unit: 'percent' }, { dimension: 'percentage', above: 0, max: 100 })
+        ? parseQuantity(
+            { value: sharePercent, unit: 'percent' },
+            { dimension: 'percentage', above: 0, max: 100 },
+          )
         : null
       if (share && !share.ok)
-        throw refusedInput('/sharePercent', sayNumberRefusal(share.refusal, waterDetails.shareField), share.refusal.code)
+        throw refusedInput(
+          '/sharePercent',
+          sayNumberRefusal(share.refusal, waterDetails.shareField),
+          share.refusal.code,
+        )
       await inTransaction(context, async (tx) => {
         const stamps = await recordedStamps(tx, facility, given.happenedAt)
         const body = await bodyOf(tx, parts, given.waterBodyId)

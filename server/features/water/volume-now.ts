@@ -83,9 +83,7 @@ export function volumeAt(
     return { row, usable: true, holds: true, basis, isolationId, refusal: null }
   }
   const named = choice.refusal.params?.['determinationId']
-  const covering = rows.filter(
-    (one) => one.happened_at <= at && one.water_body_ids.includes(waterBodyId),
-  )
+  const covering = rows.filter((one) => one.happened_at <= at && one.water_body_ids.includes(waterBodyId))
   return {
     row: rows.find((one) => one.id === named) ?? covering[0] ?? null,
     usable: false,

@@ -69,7 +69,12 @@ export function createWaterMapService(parts: WaterServiceParts) {
         tx.audit({
           action: 'connection.enter',
           subject: labelled('connection', row),
-          after: { name: row.name, kind: row.kind, between: bodies.map((body) => body.code), open: given.open },
+          after: {
+            name: row.name,
+            kind: row.kind,
+            between: bodies.map((body) => body.code),
+            open: given.open,
+          },
         })
       })
     },
@@ -220,7 +225,8 @@ export function createWaterMapService(parts: WaterServiceParts) {
         const stamps = await recordedStamps(tx, facility, given.happenedAt)
         const wanted = [...new Set(given.waterBodyIds)].sort()
         const bodies = await lockWaterBodies(tx, wanted)
-        if (bodies.length < wanted.length) throw new Problem('not-found', { detail: waterDetails.bodyNotHere })
+        if (bodies.length < wanted.length)
+          throw new Problem('not-found', { detail: waterDetails.bodyNotHere })
         const { map } = await readWaterMapAt(tx.manager, stamps.happenedAt)
         const waters = listConnectedWaters(map, stamps.happenedAt.toISOString())
         if (!waters.ok || !waters.value.some((one) => wanted.every((id) => one.waterBodyIds.includes(id))))

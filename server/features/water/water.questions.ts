@@ -116,7 +116,12 @@ function factsOf(found: EnclosureWater): WaterFacts {
     at: at.toISOString(),
     enclosureId: enclosure.id,
     enclosureCode: enclosure.code,
-    bodies: found.bodies.map(({ id, code, kind, enclosure_id }) => ({ id, code, kind, enclosureId: enclosure_id })),
+    bodies: found.bodies.map(({ id, code, kind, enclosure_id }) => ({
+      id,
+      code,
+      kind,
+      enclosureId: enclosure_id,
+    })),
     enclosures: found.enclosures.map(({ id, code, name, boundary }) => ({ id, code, name, boundary })),
     connections: water.connections.flatMap(({ connectionId, state, inside }) => {
       const row = byConnection.get(connectionId)
