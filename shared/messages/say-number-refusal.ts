@@ -1,18 +1,21 @@
+import type { DoseRefusal } from '../domain/dose/dose-refusal.ts'
 import type { Refusal } from '../domain/result.ts'
 import { isUnitCode } from '../domain/units/is-unit-code.ts'
 import { unitOf } from '../domain/units/unit-of.ts'
 import type { VolumeRefusal } from '../domain/water/volume-refusal.ts'
+import { doseRefusals } from './dose-refusals.ts'
 import { fieldExamples, numberFields } from './number-fields.ts'
 import { numberRefusals, type RefusalWords } from './number-refusals.ts'
 import { unitNames } from './units.ts'
 import { volumeRefusals } from './volume-refusals.ts'
 
 /** Every refusal that the engines of units, water and dose give. */
-export type NumberRefusalCode = VolumeRefusal
+export type NumberRefusalCode = VolumeRefusal | DoseRefusal
 
 const catalogue: Record<NumberRefusalCode, (p: RefusalWords) => string> = {
   ...numberRefusals,
   ...volumeRefusals,
+  ...doseRefusals,
 }
 
 /**

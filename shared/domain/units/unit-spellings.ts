@@ -52,6 +52,7 @@ export const unitSpellings: Partial<Record<UnitCode, readonly string[]>> = {
   'mL/L': ['ml/l', 'ml/L'],
   percent_v_v: ['% v/v', '%v/v', '% (v/v)'],
   percent_w_w: ['% w/w', '%w/w', '% (w/w)'],
+  'mg/g_w_w': ['mg/g'],
   'ug/kg': ['mcg/kg'],
   'g/mL': ['g/ml', 'g/cm3'],
   'kg/L': ['kg/l'],

@@ -1,0 +1,53 @@
+import { ok, refuse, type Result } from '../result.ts'
+import type { Quantity } from '../units/quantity.ts'
+import type { WorkingLine } from '../working/working-line.ts'
+import { amountFromMass } from './amount-from-mass.ts'
+import { amountFromProduct } from './amount-from-product.ts'
+import type { BathDose } from './bath-dose.ts'
+import type { BathProduct, BathTarget, Measure } from './bath-product.ts'
+import type { DoseRefusal } from './dose-refusal.ts'
+import { measureAmount } from './measure-amount.ts'
+import { readTarget } from './read-target.ts'
+import { riseNeeded } from './rise-needed.ts'
+
+export interface AmountInput {
+  /** The line that gives the water to be dosed, in litres. */
+  volume: WorkingLine
+  volumeErrorPercent?: number
+  target: BathTarget
+  /** What a reading found in the water already, on the basis of the target. */
+  present?: Quantity
+  product: BathProduct
+  measure?: Measure
+}
+
+/**
+ * The amount of product that brings a volume of water to its target: the core of every bath.
+ *
+ * @refuses as readTarget, riseNeeded, amountFromProduct, amountFromMass and measureAmount · error-outside-range
+ */
+export function computeAmount(input: AmountInput): Result<BathDose, DoseRefusal> {
+  const { volume, volumeErrorPercent: error, product } = input
+  if (error !== undefined && !(error >= 0 && error <= 100)) return refuse('error-outside-range', 'error')
+  const target = readTarget(input.target)
+  if (!target.ok) return target
+  const rise = riseNeeded(target.value, input.present)
+  if (!rise.ok) return rise
+  const amount =
+    target.value.basis === 'product'
+      ? amountFromProduct(target.value, rise.value, volume, product)
+      : amountFromMass(target.value.basis, rise.value, volume, product)
+  if (!amount.ok) return amount
+  const { value, unit } = amount.value
+  const measured = measureAmount(value, unit, input.measure)
+  if (!measured.ok) return measured
+  return ok({
+    amount: value,
+    unit,
+    ...(measured.value === undefined ? {} : { measured: measured.value }),
+    ...(error === undefined
+      ? {}
+      : { range: { low: value * (1 - error / 100), high: value * (1 + error / 100) } }),
+    working: [volume, ...rise.value.lines, ...amount.value.lines],
+  })
+}
