@@ -3,6 +3,7 @@ import type { DataSource } from 'typeorm'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
 import { createFacility } from './features/facility/index.ts'
+import { createFormulary } from './features/formulary/index.ts'
 import { createPeople } from './features/people/index.ts'
 import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
@@ -42,6 +43,7 @@ export function compose(outside: Outside) {
   const signing = createSigning({ ...parts, signer, lockout, facility: facility.service, people })
   const enclosures = createEnclosures(parts)
   const water = createWater({ ...parts, facility: facility.service, enclosures })
+  const formulary = createFormulary({ ...parts, facility: facility.service, people })
   return {
     parts,
     authenticator,
@@ -50,6 +52,7 @@ export function compose(outside: Outside) {
     signing,
     enclosures,
     water,
+    formulary,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -58,6 +61,7 @@ export function compose(outside: Outside) {
       ...signing.routes,
       ...enclosures.routes,
       ...water.routes,
+      ...formulary.routes,
     ],
   }
 }

@@ -31,6 +31,8 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
   if (config.demo) await seedDemo({ dataSource, clock, log, dataFolder: config.dataFolder })
   const composition = compose({ dataSource, clock, log, demo: config.demo, dataFolder: config.dataFolder })
 
+  await composition.formulary.service.loadDefaults()
+
   const server = createServer()
   const pages: Pages =
     config.mode === 'development'

@@ -3,6 +3,7 @@ import { compose } from '../composition.ts'
 import type { Clock } from '../platform/clock.ts'
 import { settableClock } from '../platform/clock.ts'
 import type { Log } from '../platform/log.ts'
+import { seedFormulary } from './formulary.ts'
 import { demoPassword, demoPeople, seedPeople } from './people.ts'
 
 const seedLock = 4400_0003
@@ -25,7 +26,9 @@ export async function seedDemo(outside: {
     const clock = settableClock(new Date(now.getTime() - historyDays * 86_400_000))
     const composition = compose({ ...outside, clock, demo: true })
     if ((await composition.people.countPeople()) > 0) return false
-    await seedPeople(composition)
+    const actors = await seedPeople(composition)
+    await composition.formulary.service.loadDefaults()
+    await seedFormulary(composition, actors, now)
     return true
   } finally {
     await runner.query('SELECT pg_advisory_unlock($1)', [seedLock])

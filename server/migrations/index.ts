@@ -1,6 +1,7 @@
 import { Foundation1764600000001 } from './0001-foundation.ts'
 import { Water1764600000002 } from './0002-water.ts'
 import { Signing1764600000010 } from './0010-signing.ts'
+import { Formulary1764600000012 } from './0012-formulary.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -8,4 +9,5 @@ export const migrations = [
   Foundation1764600000001,
   Water1764600000002,
   Signing1764600000010,
+  Formulary1764600000012,
 ]

@@ -2,6 +2,7 @@ import type { Contract } from './contract.ts'
 import * as audit from './audit.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
 import * as facility from './facility.contract.ts'
+import * as formulary from './formulary.contract.ts'
 import * as people from './people.contract.ts'
 import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
@@ -10,7 +11,19 @@ import * as waterMap from './water-map.contract.ts'
 import * as waterVolumes from './water-volumes.contract.ts'
 
 /** Modules that hold contracts; a new feature adds its own here. */
-const modules = [signIn, people, facility, audit, signing, enclosures, water, waterMap, waterVolumes]
+const modules = [
+  // one a line
+  signIn,
+  people,
+  facility,
+  audit,
+  signing,
+  enclosures,
+  water,
+  waterMap,
+  waterVolumes,
+  formulary,
+]
 
 const isContract = (value: unknown): value is Contract =>
   typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'reply' in value

@@ -3,6 +3,9 @@ import { Problem } from '../http/problem.ts'
 
 /** Which refusal a race runs into when the database stops what the service had just found allowed. */
 const byConstraint: Record<string, ProblemCode> = {
+  uq_product_lots_number: 'number-already-used',
+  uq_dose_line_confirmations_line: 'already-confirmed',
+  uq_dose_lines_supersedes: 'stale-version',
   uq_people_email: 'email-already-used',
   ck_licences_period: 'period-reversed',
   uq_setting_confirmations_version: 'already-confirmed',

@@ -42,4 +42,9 @@ export const tableKinds: Record<string, TableKind> = {
   volume_confirmations: 'ledger',
   water_voids: 'ledger',
   signed_texts: 'sealed',
+  products: 'draft',
+  product_lots: 'ledger',
+  lot_events: 'ledger',
+  dose_lines: 'ledger',
+  dose_line_confirmations: 'ledger',
 }
