@@ -1,5 +1,6 @@
 import { Foundation1764600000001 } from './0001-foundation.ts'
 import { Water1764600000002 } from './0002-water.ts'
+import { Animals1764600000003 } from './0003-animals.ts'
 import { Signing1764600000010 } from './0010-signing.ts'
 import { Formulary1764600000012 } from './0012-formulary.ts'
 
@@ -8,6 +9,7 @@ export const migrations = [
   // one a line
   Foundation1764600000001,
   Water1764600000002,
+  Animals1764600000003,
   Signing1764600000010,
   Formulary1764600000012,
 ]

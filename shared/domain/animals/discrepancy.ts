@@ -1,0 +1,29 @@
+/**
+ * A recorded fact that does not fit the ledgers. It is kept as it was seen; somebody of a named role explains it.
+ *
+ * - `more-than-counted`   more animals died or left than the ledger had
+ * - `moved-under-lock`    moved though a quarantine lock stood
+ * - `crossed-boundary`    moved over a quarantine boundary before clearance, without a documented transfer
+ * - `place-contradicted`  the last of it left at a time at which later moves still have it elsewhere
+ * - `identifier-twice`    one mark read on two animals
+ * - `count-differs`       a count made differs from the ledger
+ */
+export const discrepancyKinds = {
+  'more-than-counted': 'registrar',
+  'moved-under-lock': 'veterinarian',
+  'crossed-boundary': 'veterinarian',
+  'place-contradicted': 'registrar',
+  'identifier-twice': 'registrar',
+  'count-differs': 'registrar',
+} as const satisfies Record<string, 'registrar' | 'veterinarian'>
+
+export type DiscrepancyKind = keyof typeof discrepancyKinds
+export const discrepancyKindNames = Object.keys(discrepancyKinds) as [DiscrepancyKind, ...DiscrepancyKind[]]
+
+/**
+ * - `count-corrected` the ledger was wrong; the excess is written into it, in and out again or up and down to the count
+ * - `seen-wrongly`    what was recorded was a mistake
+ * - `explained`       neither; the reason says what it was
+ */
+export const discrepancyOutcomes = ['count-corrected', 'seen-wrongly', 'explained'] as const
+export type DiscrepancyOutcome = (typeof discrepancyOutcomes)[number]
