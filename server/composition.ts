@@ -1,5 +1,6 @@
 import path from 'node:path'
 import type { DataSource } from 'typeorm'
+import { createAnimals } from './features/animals/index.ts'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
 import { createFacility } from './features/facility/index.ts'
@@ -44,6 +45,7 @@ export function compose(outside: Outside) {
   const enclosures = createEnclosures(parts)
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
+  const animals = createAnimals({ ...parts, facility: facility.service })
   return {
     parts,
     authenticator,
@@ -53,6 +55,7 @@ export function compose(outside: Outside) {
     enclosures,
     water,
     formulary,
+    animals,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -62,6 +65,7 @@ export function compose(outside: Outside) {
       ...enclosures.routes,
       ...water.routes,
       ...formulary.routes,
+      ...animals.routes,
     ],
   }
 }

@@ -1,3 +1,4 @@
+import { animalEntities } from './features/animals/index.ts'
 import { enclosureEntities } from './features/enclosures/index.ts'
 import { facilityEntities } from './features/facility/index.ts'
 import { formularyEntities } from './features/formulary/index.ts'
@@ -14,4 +15,5 @@ export const entities = [
   ...enclosureEntities,
   ...waterEntities,
   ...formularyEntities,
+  ...animalEntities,
 ]

@@ -170,6 +170,7 @@ export class Animals1764600000003 implements MigrationInterface {
         reason text,
         documented_transfer text,
         against_rule text,
+        automatic boolean NOT NULL,
         ${recorded('moves')},
         CONSTRAINT ck_moves_places CHECK (from_enclosure_id IS DISTINCT FROM to_enclosure_id),
         CONSTRAINT ck_moves_kind_places CHECK (
@@ -215,7 +216,6 @@ export class Animals1764600000003 implements MigrationInterface {
         seen_count integer NOT NULL CONSTRAINT ck_deaths_seen CHECK (seen_count >= 1),
         posted_count integer NOT NULL,
         count_entry_id uuid CONSTRAINT fk_deaths_count_entry REFERENCES count_entries (id),
-        departure_move_id uuid CONSTRAINT fk_deaths_departure_move REFERENCES moves (id),
         enclosure_id uuid CONSTRAINT fk_deaths_enclosure REFERENCES enclosures (id),
         carcass_state text,
         carcass_place text,

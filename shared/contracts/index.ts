@@ -1,4 +1,6 @@
 import type { Contract } from './contract.ts'
+import * as animalRecords from './animal-records.contract.ts'
+import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
 import * as facility from './facility.contract.ts'
@@ -9,6 +11,8 @@ import * as signIn from './sign-in.contract.ts'
 import * as water from './water.contract.ts'
 import * as waterMap from './water-map.contract.ts'
 import * as waterVolumes from './water-volumes.contract.ts'
+
+import * as taxa from './taxa.contract.ts'
 
 /** Modules that hold contracts; a new feature adds its own here. */
 const modules = [
@@ -23,6 +27,9 @@ const modules = [
   waterMap,
   waterVolumes,
   formulary,
+  taxa,
+  animals,
+  animalRecords,
 ]
 
 const isContract = (value: unknown): value is Contract =>

@@ -38,6 +38,8 @@ export class MoveRow extends RecordedFact {
   @Column({ type: 'text', name: 'documented_transfer', nullable: true }) documentedTransfer!: string | null
   /** The rule that it broke, for a move that had happened already. */
   @Column({ type: 'text', name: 'against_rule', nullable: true }) againstRule!: string | null
+  /** Written by the count ledger when the last one left it, and struck out by it when there is one again. */
+  @Column({ type: 'boolean' }) automatic!: boolean
 }
 
 /** The mass of one animal, or the mean of those weighed together. */
@@ -64,7 +66,6 @@ export class DeathRow extends RecordedFact {
   @Column({ type: 'integer', name: 'seen_count' }) seenCount!: number
   @Column({ type: 'integer', name: 'posted_count' }) postedCount!: number
   @Column({ type: 'uuid', name: 'count_entry_id', nullable: true }) countEntryId!: string | null
-  @Column({ type: 'uuid', name: 'departure_move_id', nullable: true }) departureMoveId!: string | null
   @Column({ type: 'uuid', name: 'enclosure_id', nullable: true }) enclosureId!: string | null
   @Column({ type: 'text', name: 'carcass_state', nullable: true }) carcassState!: CarcassState | null
   @Column({ type: 'text', name: 'carcass_place', nullable: true }) carcassPlace!: CarcassPlace | null

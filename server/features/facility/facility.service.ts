@@ -6,6 +6,7 @@ import { settingNames, settingRefusals } from '../../../shared/messages/settings
 import type { Setting } from '../../../shared/contracts/facility.contract.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import { timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import { presentSetting } from './facility.present.ts'
@@ -27,6 +28,14 @@ const fixedForms = {
   permit: 'PM-{000}',
 } as const
 export type NumberKind = keyof typeof fixedForms | 'accession'
+
+/** The three times of a recorded fact, and who wrote it down. */
+export interface FactTimes {
+  happenedAt: Date
+  happenedOn: string
+  recordedAt: Date
+  recordedBy: string | null
+}
 
 /** Puts a running number into a form such as `HP-{0000}`. */
 export function formatNumber(form: string, number: number): string {
@@ -111,6 +120,15 @@ export function createFacilityService(parts: FacilityParts) {
     /** The facility's calendar date of an instant. */
     async dateOf(at: Date, tx?: Tx): Promise<string> {
       return facilityDateOf(at.toISOString(), await valueOf('facility.zone', tx))
+    },
+    /**
+     * The times of a fact: when it happened, on which day of the facility, when it was written down and by whom.
+     * A time more than 5 minutes ahead is refused; however long ago is taken.
+     */
+    async timesOf(tx: Tx, happenedAt: string, pointer = '/happenedAt'): Promise<FactTimes> {
+      const at = timeNotAhead(happenedAt, tx.at, pointer)
+      const happenedOn = facilityDateOf(at.toISOString(), await valueOf('facility.zone', tx))
+      return { happenedAt: at, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
     },
     async acceptedJurisdictions(tx?: Tx): Promise<string[]> {
       return itemsOf(await valueOf('facility.jurisdictions', tx))

@@ -4,7 +4,7 @@ import { facilityRoutes } from './facility.routes.ts'
 import { createFacilityService } from './facility.service.ts'
 import { SettingConfirmation, SettingVersion } from './setting.entity.ts'
 
-export type { FacilityService, NumberKind } from './facility.service.ts'
+export type { FacilityService, FactTimes, NumberKind } from './facility.service.ts'
 export const facilityEntities = [SettingVersion, SettingConfirmation]
 
 export function createFacility(parts: Parts) {

@@ -26,6 +26,11 @@ const byConstraint: Record<string, ProblemCode> = {
   uq_water_voids_life_support_state: 'already-void',
   uq_water_voids_determination: 'already-void',
   uq_water_voids_isolation: 'already-void',
+  uq_taxa_scientific_name: 'taxon-already-known',
+  ck_count_entries_running_sum: 'count-too-small',
+  ck_count_entries_individual: 'not-a-group',
+  ex_stays_one_place: 'contradicts-another-move',
+  uq_discrepancy_resolutions_discrepancy: 'already-resolved',
 }
 
 /** The problem for a broken constraint; null when none is foreseen, which is a bug and answers 500. */

@@ -31,6 +31,24 @@ const comparable = (value: unknown) =>
   JSON.stringify(value instanceof Date ? value.toISOString() : (value ?? null))
 
 /**
+ * Whether a record under this id is there already with the same content: the same request sent again. With other
+ * content the request is refused.
+ */
+export async function isRepeated<T extends ObjectLiteral & { id: string }>(
+  tx: Tx,
+  target: EntityTarget<T>,
+  content: Partial<T> & { id: string },
+): Promise<boolean> {
+  const earlier = await tx.manager.findOneBy(target, { id: content.id } as never)
+  if (!earlier) return false
+  const same = (Object.keys(content) as (keyof T)[]).every(
+    (field) => comparable(earlier[field]) === comparable(content[field]),
+  )
+  if (!same) throw new Problem('id-already-used')
+  return true
+}
+
+/**
  * Writes a record under its own id, once. The same id with the same content is the same request sent again and
  * changes nothing; with other content it is refused. Two at the same moment: the primary key stops the second, whose
  * transaction starts again and then finds the first.
@@ -44,12 +62,8 @@ export async function insertOnce<T extends ObjectLiteral & { id: string }>(
   row: T,
   compare: readonly (keyof T)[],
 ): Promise<{ created: boolean }> {
-  const earlier = await tx.manager.findOneBy(target, { id: row.id } as never)
-  if (!earlier) {
-    await tx.manager.insert(target, row as never)
-    return { created: true }
-  }
-  const same = compare.every((field) => comparable(earlier[field]) === comparable(row[field]))
-  if (!same) throw new Problem('id-already-used')
-  return { created: false }
+  const content = Object.fromEntries(['id' as keyof T, ...compare].map((field) => [field, row[field]]))
+  if (await isRepeated(tx, target, content as Partial<T> & { id: string })) return { created: false }
+  await tx.manager.insert(target, row as never)
+  return { created: true }
 }

@@ -7,7 +7,8 @@ export interface WeightBand {
   highKg: number
 }
 
-export type WeightDoubt = 'far-below-band' | 'far-above-band' | 'below-band' | 'above-band' | 'unlike-the-last'
+export type WeightDoubt =
+  'far-below-band' | 'far-above-band' | 'below-band' | 'above-band' | 'unlike-the-last'
 
 /**
  * - `plausible`          inside the band, or no band is known and nothing speaks against it

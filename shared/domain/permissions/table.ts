@@ -14,6 +14,7 @@ import type { Role } from './roles.ts'
  * - `flag-only`            may flag something seen, not record a round
  * - `open-only`            may open a case, not split it or change its protocol
  * - `inside-quarantine-boundary` the move stays inside one quarantine boundary, or the animal is cleared
+ * - `named-role`           the discrepancy is for a role that the person holds
  * - `may-write-parent`     may write the record that the document belongs to
  * - `clinical-and-own` · `own-entries` · `clinical-text-withheld`  the part of the audit trail that is shown
  */
@@ -29,6 +30,7 @@ export type Condition =
   | 'flag-only'
   | 'open-only'
   | 'inside-quarantine-boundary'
+  | 'named-role'
   | 'may-write-parent'
   | 'clinical-and-own'
   | 'own-entries'
@@ -97,6 +99,7 @@ export const permissions = {
     'inside-quarantine-boundary',
     'no',
   ),
+  'discrepancy.resolve': row('named-role', 'no', 'no', 'named-role', 'no'),
   'history.export': row('yes', 'no', 'no', 'yes', 'no'),
   'formulary.propose': row('yes', 'yes', 'no', 'no', 'no'),
   'formulary.confirm': row('valid-licence', 'no', 'no', 'no', 'no'),

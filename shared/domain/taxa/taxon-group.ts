@@ -1,3 +1,7 @@
+/** The kinds by which quarantine tells animals apart: an added wrasse is of one kind with tangs, whatever its order. */
+export const quarantineKindNames = ['fish', 'amphibian', 'reptile', 'bird', 'mammal', 'invertebrate'] as const
+export type QuarantineKindName = (typeof quarantineKindNames)[number]
+
 /**
  * Groups of taxa as the rules of treatment and quarantine tell them apart: a group is what a caution asks for, not a
  * rank of the taxonomy. Salmonids and sturgeons stand apart from the other bony fish because label ceilings do.
@@ -23,9 +27,6 @@ export const taxonGroups = {
   echinoderm: 'invertebrate',
   'other-invertebrate': 'invertebrate',
 } as const satisfies Record<string, QuarantineKindName>
-
-/** The kinds by which quarantine tells animals apart. */
-type QuarantineKindName = 'fish' | 'amphibian' | 'reptile' | 'bird' | 'mammal' | 'invertebrate'
 
 export type TaxonGroup = keyof typeof taxonGroups
 export const taxonGroupNames = Object.keys(taxonGroups) as [TaxonGroup, ...TaxonGroup[]]

@@ -1,0 +1,267 @@
+import type {
+  AnimalForm,
+  IdentifierKind,
+  LifeStage,
+  Sex,
+} from '../../../shared/domain/animals/description.ts'
+import { countKinds } from '../../../shared/domain/ledger/count-entry.ts'
+import type { CountKind } from '../../../shared/domain/ledger/count-entry.ts'
+import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
+import { isRepeated } from '../../platform/database/rows.ts'
+import type { Tx } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import { Animal } from './animal.entity.ts'
+import * as animals from './animals.repository.ts'
+import { readLocks } from './chart.reads.ts'
+import { birthColumns } from './identify.service.ts'
+import type { Birth, Identify } from './identify.service.ts'
+import * as repository from './ledgers.repository.ts'
+import { subjectOf } from './moves.service.ts'
+import type { MoveParts, Moves } from './moves.service.ts'
+import { refuseField } from './refuse.ts'
+import { findTaxon } from './taxa.repository.ts'
+
+export interface Accession {
+  /** Id of the new animal or group, made by whoever records it. */
+  id: string
+  form: AnimalForm
+  taxonId: string
+  name?: string | null
+  sex: Sex
+  stage: LifeStage
+  birth?: Birth | null
+  /** Whole animals by which the ledger begins; 1 for an individual. */
+  count: number
+  /** For a group that nobody could count: the range. */
+  estimate?: { low: number; high: number }
+  /** How they came, in the registrar's trade terms. */
+  kind: CountKind
+  enclosureId: string
+  identifiers?: {
+    id: string
+    kind: IdentifierKind
+    value: string
+    place?: string
+    readTwiceReason?: string
+  }[]
+  happenedAt: string
+}
+
+export interface CountChange {
+  /** Id of the ledger line, which makes a retry harmless. */
+  id: string
+  animalId: string
+  kind: CountKind
+  /** Whole animals, more than 0; the kind says which way. */
+  count: number
+  reason?: string | null
+  happenedAt: string
+  /** What is recorded has happened: an excess is kept as a discrepancy instead of being refused. */
+  isFact: boolean
+  source: { kind: string; id: string }
+}
+
+/** What the register and other features write of animals, inside a transaction of their own. */
+export function createAccession(parts: MoveParts & { moves: Moves; identify: Identify }) {
+  const { facility, ledgers, moves } = parts
+
+  return {
+    /**
+     * Enters an animal or group: accession number, description, first line of its ledger, first stay.
+     *
+     * @returns its accession number; `created` is false when the same accession was entered before
+     * @refuses not-found (taxon, enclosure) | bad-input (an individual of other than 1) | in-the-future | id-already-used
+     */
+    async accessionAnimal(tx: Tx, given: Accession): Promise<{ accession: string; created: boolean }> {
+      const times = await facility.timesOf(tx, given.happenedAt)
+      const content = { id: given.id, form: given.form, recordedBy: tx.actor.personId }
+      if (await isRepeated(tx, Animal, content))
+        return { accession: (await animals.findAnimal(tx, given.id))?.accession ?? '', created: false }
+      if (given.form === 'individual' && (given.count !== 1 || given.estimate))
+        throw refuseField('bad-input', '/count', animalRefusals.individualIsOne)
+      if (given.estimate && given.estimate.high < given.estimate.low)
+        throw refuseField('bad-input', '/estimate', animalRefusals.countRange)
+      if (!(await findTaxon(tx, given.taxonId)))
+        throw refuseField('not-found', '/taxonId', animalRefusals.noSuchTaxon)
+      const enclosure = await moves.findTarget(tx, given.enclosureId, times.happenedAt, '/enclosureId')
+
+      const description = {
+        taxonId: given.taxonId,
+        name: given.name ?? null,
+        sex: given.sex,
+        stage: given.stage,
+        ...birthColumns(given.birth ?? null),
+      }
+      const animal: Animal = {
+        id: given.id,
+        accession: await facility.nextNumber(tx, 'accession'),
+        form: given.form,
+        splitFromId: null,
+        ...description,
+        recordedAt: tx.at,
+        recordedBy: tx.actor.personId,
+        version: 1,
+      }
+      await animals.insertAnimal(tx, animal)
+      await animals.insertDescription(tx, {
+        id: parts.ids.next(),
+        animalId: animal.id,
+        ...description,
+        reason: null,
+        ...times,
+      })
+      await ledgers.post(
+        tx,
+        animal,
+        { id: parts.ids.next(), kind: given.kind, delta: given.count, reason: null },
+        times,
+      )
+      if (given.estimate)
+        await repository.insertStatement(tx, {
+          id: parts.ids.next(),
+          animalId: animal.id,
+          basis: 'estimated',
+          ...given.estimate,
+          note: null,
+          ...times,
+        })
+      await repository.insertMove(tx, {
+        id: parts.ids.next(),
+        animalId: animal.id,
+        kind: 'arrival',
+        fromEnclosureId: null,
+        toEnclosureId: enclosure.id,
+        reason: null,
+        documentedTransfer: null,
+        againstRule: null,
+        automatic: false,
+        ...times,
+      })
+      await ledgers.rebuildStays(tx, animal.id)
+      tx.audit({
+        action: 'animal.accession',
+        subject: subjectOf(animal),
+        after: {
+          form: given.form,
+          taxonId: given.taxonId,
+          count: given.count,
+          estimate: given.estimate ? { ...given.estimate } : undefined,
+          kind: given.kind,
+          enclosure: enclosure.code,
+          happenedAt: times.happenedAt.toISOString(),
+        },
+      })
+      for (const identifier of given.identifiers ?? [])
+        await parts.identify.writeIdentifier(
+          tx,
+          animal,
+          { ...identifier, happenedAt: given.happenedAt },
+          times,
+        )
+      return { accession: animal.accession, created: true }
+    },
+
+    /**
+     * Changes the count of an animal or group by something other than a death seen in the house: births, sales,
+     * transfers, escapes. When the last one leaves, its stay ends with it.
+     *
+     * @returns what was posted, and the excess that a fact leaves behind as a discrepancy
+     * @refuses not-found | count-too-small (not for facts) | movement-locked (leaving under a lock, not for facts)
+     */
+    async changeCount(
+      tx: Tx,
+      given: CountChange,
+    ): Promise<{ postedCount: number; excessCount: number; created: boolean }> {
+      const animal = (await animals.lockAnimals(tx, [given.animalId])).get(given.animalId)
+      if (!animal) throw new Problem('not-found')
+      const times = await facility.timesOf(tx, given.happenedAt)
+      const earlier = await repository.findEntry(tx, given.id)
+      if (earlier) {
+        if (earlier.animalId !== animal.id || earlier.kind !== given.kind)
+          throw new Problem('id-already-used')
+        const postedCount = Math.abs(earlier.delta)
+        return { postedCount, excessCount: given.count - postedCount, created: false }
+      }
+      const leaves = countKinds[given.kind] === 'out'
+      if (leaves && !given.isFact) {
+        const locks = await readLocks(tx.manager, [animal.id], times.happenedAt)
+        if (locks.length > 0)
+          throw new Problem('movement-locked', {
+            detail: animalRefusals.movementLocked({
+              accession: animal.accession,
+              by: locks
+                .map((lock) => animalRefusals.openRequest({ label: lock.source_label, reason: lock.reason }))
+                .join('; '),
+            }),
+          })
+      }
+      const posted = await ledgers.post(
+        tx,
+        animal,
+        {
+          id: given.id,
+          kind: given.kind,
+          delta: leaves ? -given.count : given.count,
+          reason: given.reason ?? null,
+        },
+        times,
+      )
+      if (posted.excessCount > 0 && !given.isFact)
+        throw refuseField(
+          'count-too-small',
+          '/count',
+          animalRefusals.countTooSmall({
+            accession: animal.accession,
+            available: posted.postedCount,
+            wanted: given.count,
+          }),
+        )
+      tx.audit({
+        action: 'animal.change-count',
+        subject: subjectOf(animal),
+        after: {
+          kind: given.kind,
+          count: given.count,
+          posted: posted.postedCount,
+          reason: given.reason ?? undefined,
+        },
+      })
+      if (posted.excessCount > 0)
+        await ledgers.openDiscrepancy(tx, animal, {
+          kind: 'more-than-counted',
+          source: given.source,
+          facts: {
+            seen: given.count,
+            posted: posted.postedCount,
+            excess: posted.excessCount,
+            cause: given.kind,
+          },
+          times,
+        })
+      await ledgers.settlePlace(tx, animal, given.source)
+      return { postedCount: posted.postedCount, excessCount: posted.excessCount, created: true }
+    },
+
+    /** Strikes out a ledger line that another feature wrote, when that feature strikes its own record. */
+    async strikeCount(tx: Tx, given: { countEntryId: string; reason: string }): Promise<void> {
+      const entry = await repository.findEntry(tx, given.countEntryId)
+      if (!entry) throw new Problem('not-found')
+      const animal = (await animals.lockAnimals(tx, [entry.animalId])).get(entry.animalId)
+      if (!animal) throw new Problem('not-found')
+      if (await repository.isStruck(tx, 'countEntryId', entry.id)) return
+      await repository.strike(tx, {
+        id: parts.ids.next(),
+        what: 'countEntryId',
+        rowId: entry.id,
+        reason: given.reason,
+      })
+      tx.audit({
+        action: 'animal.strike-count',
+        subject: subjectOf(animal),
+        before: { kind: entry.kind, delta: entry.delta },
+        after: { reason: given.reason },
+      })
+      await ledgers.settlePlace(tx, animal, { kind: 'count-entry', id: entry.id })
+    },
+  }
+}

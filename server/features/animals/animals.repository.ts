@@ -1,0 +1,111 @@
+import { updateVersioned } from '../../platform/database/rows.ts'
+import type { Tx } from '../../platform/database/transactions.ts'
+import { Animal, AnimalDescription, Identifier, IdentifierEnd } from './animal.entity.ts'
+
+/** Locks the heads of animals, in one order, until the transaction ends. */
+export async function lockAnimals(tx: Tx, ids: readonly string[]): Promise<Map<string, Animal>> {
+  const locked = new Map<string, Animal>()
+  for (const id of [...new Set(ids)].sort()) {
+    const row = await tx.manager.findOne(Animal, { where: { id }, lock: { mode: 'pessimistic_write' } })
+    if (row) locked.set(id, row)
+  }
+  return locked
+}
+
+export async function findAnimalId(tx: Tx, accession: string): Promise<string | null> {
+  return (await tx.manager.findOneBy(Animal, { accession }))?.id ?? null
+}
+
+export function findAnimal(tx: Tx, id: string): Promise<Animal | null> {
+  return tx.manager.findOneBy(Animal, { id })
+}
+
+export async function insertAnimal(tx: Tx, row: Animal): Promise<void> {
+  await tx.manager.insert(Animal, row)
+}
+
+export async function insertDescription(tx: Tx, row: AnimalDescription): Promise<void> {
+  await tx.manager.insert(AnimalDescription, row)
+}
+
+/** The description in force at an instant; the earliest one before that. */
+export async function descriptionAt(tx: Tx, animalId: string, at: Date): Promise<AnimalDescription | null> {
+  return tx.manager
+    .createQueryBuilder(AnimalDescription, 'd')
+    .where('d.animal_id = :animalId', { animalId })
+    .orderBy('d.happened_at <= :at', 'DESC')
+    .addOrderBy('CASE WHEN d.happened_at <= :at THEN d.happened_at END', 'DESC', 'NULLS LAST')
+    .addOrderBy('d.happened_at', 'ASC')
+    .addOrderBy('d.recorded_at', 'DESC')
+    .addOrderBy('d.id', 'DESC')
+    .setParameters({ at })
+    .limit(1)
+    .getOne()
+}
+
+/** Makes the head of an animal say what its newest description says. */
+export async function takeNewestDescription(tx: Tx, key: { id: string; version: number }): Promise<void> {
+  const newest = await tx.manager.findOneOrFail(AnimalDescription, {
+    where: { animalId: key.id },
+    order: { happenedAt: 'DESC', recordedAt: 'DESC', id: 'DESC' },
+  })
+  const { taxonId, name, sex, stage, birthKind, birthDate, birthApproximate } = newest
+  await updateVersioned(tx, Animal, key, {
+    taxonId,
+    name,
+    sex,
+    stage,
+    birthKind,
+    birthDate,
+    birthApproximate,
+  })
+}
+
+export async function insertIdentifier(tx: Tx, row: Identifier): Promise<void> {
+  await tx.manager.insert(Identifier, row)
+}
+
+export function findIdentifier(tx: Tx, id: string): Promise<Identifier | null> {
+  return tx.manager.findOneBy(Identifier, { id })
+}
+
+/** Accession of another animal that carries the mark now; null when none does. */
+export async function whoCarries(tx: Tx, valueKey: string, otherThan: string): Promise<string | null> {
+  const [row]: { accession: string }[] = await tx.manager.query(
+    `SELECT a.accession FROM identifiers i JOIN animals a ON a.id = i.animal_id
+      WHERE i.value_key = $1 AND i.animal_id <> $2
+        AND NOT EXISTS (SELECT 1 FROM identifier_ends x WHERE x.identifier_id = i.id)
+      ORDER BY i.recorded_at LIMIT 1`,
+    [valueKey, otherThan],
+  )
+  return row?.accession ?? null
+}
+
+/** Marks are compared one at a time, so that two people cannot put one on two animals at the same moment. */
+export async function lockMark(tx: Tx, valueKey: string): Promise<void> {
+  await tx.manager.query(`SELECT pg_advisory_xact_lock(hashtextextended('mark ' || $1, 0))`, [valueKey])
+}
+
+export function hasIdentifierEnded(tx: Tx, identifierId: string): Promise<boolean> {
+  return tx.manager.existsBy(IdentifierEnd, { identifierId })
+}
+
+export async function insertIdentifierEnd(tx: Tx, row: IdentifierEnd): Promise<void> {
+  await tx.manager.insert(IdentifierEnd, row)
+}
+
+export interface EnclosureRow {
+  id: string
+  code: string
+  boundary: string | null
+  in_use_until: Date | null
+}
+
+/** Enclosures as far as moves are judged by them. */
+export async function findEnclosures(tx: Tx, ids: readonly string[]): Promise<Map<string, EnclosureRow>> {
+  const rows: EnclosureRow[] = await tx.manager.query(
+    `SELECT e.id, e.code, e.boundary, e.in_use_until FROM enclosures e WHERE e.id = ANY ($1)`,
+    [ids],
+  )
+  return new Map(rows.map((row) => [row.id, row]))
+}

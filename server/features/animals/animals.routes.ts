@@ -1,0 +1,43 @@
+import * as contracts from '../../../shared/contracts/animals.contract.ts'
+import type { Clock } from '../../platform/clock.ts'
+import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
+import { csvReply } from '../../platform/http/csv-reply.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Route } from '../../platform/http/route.ts'
+import { animalCsvColumns } from './animal-csv.ts'
+import type { AnimalQueries } from './animals.queries.ts'
+
+/** Lists, sheets and the log of animals: all that only reads. */
+export function animalRoutes(queries: AnimalQueries, clock: Clock): Route[] {
+  return [
+    route(contracts.listAnimals, async ({ query }) => {
+      const page = pageOf(query)
+      const { rows, total } = await queries.animals({ ...query, state: query.state ?? 'here', ...page })
+      return { rows, total, nextCursor: nextCursorOf(page, total) }
+    }),
+    route(contracts.listAnimalsCsv, async ({ query }) => {
+      const { rows } = await queries.animals({ ...query, state: query.state ?? 'here' })
+      return csvReply('animals.csv', animalCsvColumns(), rows)
+    }),
+    route(contracts.getAnimal, ({ params, context }) =>
+      queries.animal(params.accession, context.actor.roles),
+    ),
+    route(contracts.listInhabitants, async ({ params, query }) => {
+      const at = query.at === undefined ? clock.now() : new Date(query.at)
+      return { at: at.toISOString(), rows: await queries.inhabitants(params.code, at) }
+    }),
+    route(contracts.listWeights, async ({ params }) => ({ rows: await queries.weights(params.accession) })),
+    route(contracts.listMoves, async ({ params }) => ({ rows: await queries.moves(params.accession) })),
+    route(contracts.listCounts, ({ params }) => queries.counts(params.accession)),
+    route(contracts.listAnimalLog, async ({ params, query }) => {
+      const page = pageOf(query)
+      const { rows, total } = await queries.log(params.accession, page)
+      return { rows, total, nextCursor: nextCursorOf(page, total) }
+    }),
+    route(contracts.listDiscrepancies, async ({ query }) => {
+      const page = pageOf(query)
+      const { rows, total } = await queries.discrepancies({ ...query, ...page })
+      return { rows, total, nextCursor: nextCursorOf(page, total) }
+    }),
+  ]
+}

@@ -1,0 +1,66 @@
+import type { Parts } from '../../platform/parts.ts'
+import type { FacilityService } from '../facility/index.ts'
+import { Animal, AnimalDescription, Identifier, IdentifierEnd } from './animal.entity.ts'
+import {
+  AnimalVoid,
+  CountEntryRow,
+  CountStatementRow,
+  DeathRow,
+  MoveRow,
+  WeightRow,
+} from './animal-ledgers.entity.ts'
+import { animalRecordRoutes } from './animal-records.routes.ts'
+import {
+  DiscrepancyResolutionRow,
+  DiscrepancyRow,
+  MovementLockLiftRow,
+  MovementLockRow,
+} from './animal-watch.entity.ts'
+import { createAnimalQueries } from './animals.queries.ts'
+import { createAnimalQuestions } from './animals.questions.ts'
+import { animalRoutes } from './animals.routes.ts'
+import { createAnimalsService } from './animals.service.ts'
+import { taxaRoutes } from './taxa.routes.ts'
+import { Taxon, TaxonSensitivity, TaxonWeightBand } from './taxon.entity.ts'
+
+export type { Accession, CountChange } from './accession.service.ts'
+export type { AnimalFacts, AnimalQuestions } from './animals.questions.ts'
+export type { AnimalsService } from './animals.service.ts'
+export type { LockSource } from './locks.service.ts'
+export { verifyAnimals } from './verify-animals.ts'
+
+export const animalEntities = [
+  Taxon,
+  TaxonWeightBand,
+  TaxonSensitivity,
+  Animal,
+  AnimalDescription,
+  Identifier,
+  IdentifierEnd,
+  CountEntryRow,
+  CountStatementRow,
+  MoveRow,
+  WeightRow,
+  DeathRow,
+  AnimalVoid,
+  DiscrepancyRow,
+  DiscrepancyResolutionRow,
+  MovementLockRow,
+  MovementLockLiftRow,
+]
+
+export function createAnimals(parts: Parts & { facility: FacilityService }) {
+  const service = createAnimalsService(parts)
+  const queries = createAnimalQueries(parts)
+  return {
+    service,
+    questions: createAnimalQuestions(parts),
+    routes: [
+      ...animalRoutes(queries, parts.clock),
+      ...animalRecordRoutes(service, queries),
+      ...taxaRoutes(service, queries),
+    ],
+  }
+}
+
+export type Animals = ReturnType<typeof createAnimals>
