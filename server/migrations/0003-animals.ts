@@ -47,11 +47,12 @@ export class Animals1764600000003 implements MigrationInterface {
         high_kg double precision NOT NULL,
         source text NOT NULL,
         mark text NOT NULL CONSTRAINT ck_taxon_weight_bands_mark CHECK (mark IN ('V', 'V2', 'C', 'M', 'P')),
+        position bigint GENERATED ALWAYS AS IDENTITY,
         ${written('taxon_weight_bands')},
         CONSTRAINT ck_taxon_weight_bands_order CHECK (low_kg > 0 AND high_kg >= low_kg AND high_kg < 'Infinity')
       )`)
     await q.query(
-      `CREATE INDEX ix_taxon_weight_bands_newest ON taxon_weight_bands (taxon_id, stage, recorded_at DESC, id DESC)`,
+      `CREATE INDEX ix_taxon_weight_bands_newest ON taxon_weight_bands (taxon_id, stage, position DESC)`,
     )
     await q.query(`
       CREATE TABLE taxon_sensitivities (
@@ -61,11 +62,12 @@ export class Animals1764600000003 implements MigrationInterface {
         level text NOT NULL CONSTRAINT ck_taxon_sensitivities_level
           CHECK (level IN ('avoid', 'caution', 'tolerates', 'none')),
         note text,
+        position bigint GENERATED ALWAYS AS IDENTITY,
         ${written('taxon_sensitivities')}
       )`)
     await q.query(
       `CREATE INDEX ix_taxon_sensitivities_newest
-         ON taxon_sensitivities (taxon_id, code, recorded_at DESC, id DESC)`,
+         ON taxon_sensitivities (taxon_id, code, position DESC)`,
     )
 
     await q.query(`
@@ -99,11 +101,12 @@ export class Animals1764600000003 implements MigrationInterface {
         birth_date text,
         birth_approximate boolean NOT NULL,
         reason text,
+        position bigint GENERATED ALWAYS AS IDENTITY,
         ${recorded('animal_descriptions')}
       )`)
     await q.query(
       `CREATE INDEX ix_animal_descriptions_newest
-         ON animal_descriptions (animal_id, happened_at DESC, recorded_at DESC, id DESC)`,
+         ON animal_descriptions (animal_id, happened_at DESC, position DESC)`,
     )
 
     await q.query(`

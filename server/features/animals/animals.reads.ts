@@ -96,7 +96,7 @@ const asOf = `
                               WHERE z.discrepancy_id = q.id AND z.recorded_at <= $1)) AS open_discrepancies
     FROM animals a
     LEFT JOIN LATERAL (SELECT d.* FROM animal_descriptions d WHERE d.animal_id = a.id AND d.happened_at <= $1
-                        ORDER BY d.happened_at DESC, d.recorded_at DESC, d.id DESC LIMIT 1) d ON true
+                        ORDER BY d.happened_at DESC, d.position DESC LIMIT 1) d ON true
     JOIN taxa t ON t.id = coalesce(d.taxon_id, a.taxon_id)
     LEFT JOIN stays s ON s.animal_id = a.id AND s.during @> $1::timestamptz
     LEFT JOIN enclosures e ON e.id = s.enclosure_id

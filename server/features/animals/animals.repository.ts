@@ -28,37 +28,33 @@ export async function insertDescription(tx: Tx, row: AnimalDescription): Promise
   await tx.manager.insert(AnimalDescription, row)
 }
 
+const described = `d.taxon_id AS "taxonId", d.name, d.sex, d.stage, d.birth_kind AS "birthKind",
+  d.birth_date AS "birthDate", d.birth_approximate AS "birthApproximate"`
+
+export type Description = Pick<
+  AnimalDescription,
+  'taxonId' | 'name' | 'sex' | 'stage' | 'birthKind' | 'birthDate' | 'birthApproximate'
+>
+
 /** The description in force at an instant; the earliest one before that. */
-export async function descriptionAt(tx: Tx, animalId: string, at: Date): Promise<AnimalDescription | null> {
-  return tx.manager
-    .createQueryBuilder(AnimalDescription, 'd')
-    .where('d.animal_id = :animalId', { animalId })
-    .orderBy('d.happened_at <= :at', 'DESC')
-    .addOrderBy('CASE WHEN d.happened_at <= :at THEN d.happened_at END', 'DESC', 'NULLS LAST')
-    .addOrderBy('d.happened_at', 'ASC')
-    .addOrderBy('d.recorded_at', 'DESC')
-    .addOrderBy('d.id', 'DESC')
-    .setParameters({ at })
-    .limit(1)
-    .getOne()
+export async function descriptionAt(tx: Tx, animalId: string, at: Date): Promise<Description | null> {
+  const [row]: Description[] = await tx.manager.query(
+    `SELECT ${described} FROM animal_descriptions d WHERE d.animal_id = $1
+      ORDER BY d.happened_at <= $2 DESC, CASE WHEN d.happened_at <= $2 THEN d.happened_at END DESC,
+               d.happened_at, d.position DESC LIMIT 1`,
+    [animalId, at],
+  )
+  return row ?? null
 }
 
 /** Makes the head of an animal say what its newest description says. */
 export async function takeNewestDescription(tx: Tx, key: { id: string; version: number }): Promise<void> {
-  const newest = await tx.manager.findOneOrFail(AnimalDescription, {
-    where: { animalId: key.id },
-    order: { happenedAt: 'DESC', recordedAt: 'DESC', id: 'DESC' },
-  })
-  const { taxonId, name, sex, stage, birthKind, birthDate, birthApproximate } = newest
-  await updateVersioned(tx, Animal, key, {
-    taxonId,
-    name,
-    sex,
-    stage,
-    birthKind,
-    birthDate,
-    birthApproximate,
-  })
+  const [newest]: [Description] = await tx.manager.query(
+    `SELECT ${described} FROM animal_descriptions d WHERE d.animal_id = $1
+      ORDER BY d.happened_at DESC, d.position DESC LIMIT 1`,
+    [key.id],
+  )
+  await updateVersioned(tx, Animal, key, newest)
 }
 
 export async function insertIdentifier(tx: Tx, row: Identifier): Promise<void> {

@@ -24,6 +24,9 @@ export function sound<T>(result: Result<T>): T {
   )
 }
 
+/** Later than anything that is recorded. */
+const endOfTime = new Date('9999-12-31T00:00:00Z')
+
 export interface CountFact {
   /** Id of the line to write. */
   id: string
@@ -102,7 +105,7 @@ export function createLedgers(parts: { ids: Ids }) {
     if (!last) return
     const moves = await repository.readLiveMoves(tx, animal.id)
     const lastMove = moves.at(-1)
-    const left = await countAt(tx, animal.id, new Date(8.64e15))
+    const left = await countAt(tx, animal.id, endOfTime)
     const gone = last.balance === 0 && (left.basis === 'counted' || left.high === 0)
     const emptied = lastMove?.automatic && lastMove.toEnclosureId === null ? lastMove : null
     if (emptied && gone && emptied.at === last.entry.at) return

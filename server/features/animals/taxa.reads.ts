@@ -68,12 +68,12 @@ export function readTaxa(db: Db, filter: TaxaFilter): Promise<TaxonReadRow[]> {
                       b.recorded_at,
                       (SELECT p.printed_name FROM people p WHERE p.id = b.recorded_by) AS recorded_by_name
                  FROM taxon_weight_bands b WHERE b.taxon_id = t.id
-                ORDER BY b.stage, b.recorded_at DESC, b.id DESC) b), '[]') AS weight_bands,
+                ORDER BY b.stage, b.position DESC) b), '[]') AS weight_bands,
             coalesce((SELECT json_agg(to_jsonb(s) ORDER BY s.code) FROM (
                SELECT DISTINCT ON (s.code) s.code, s.level, s.note, s.recorded_at,
                       (SELECT p.printed_name FROM people p WHERE p.id = s.recorded_by) AS recorded_by_name
                  FROM taxon_sensitivities s WHERE s.taxon_id = t.id
-                ORDER BY s.code, s.recorded_at DESC, s.id DESC) s WHERE s.level <> 'none'), '[]') AS sensitivities,
+                ORDER BY s.code, s.position DESC) s WHERE s.level <> 'none'), '[]') AS sensitivities,
             (SELECT count(*)::int FROM animals a JOIN stays y ON y.animal_id = a.id AND upper_inf(y.during)
               WHERE a.taxon_id = t.id) AS animals_here,
             count(*) OVER ()::int AS total

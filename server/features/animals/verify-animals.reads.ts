@@ -33,7 +33,7 @@ export async function readStored(db: Db): Promise<StoredAnimal[]> {
   }[] = await db.query(
     `SELECT a.id, a.accession, ${described('a')} AS head,
             (SELECT ${described('d')} FROM animal_descriptions d WHERE d.animal_id = a.id
-              ORDER BY d.happened_at DESC, d.recorded_at DESC, d.id DESC LIMIT 1) AS newest,
+              ORDER BY d.happened_at DESC, d.position DESC LIMIT 1) AS newest,
             coalesce((SELECT sum(e.delta) FROM live_count_entries e WHERE e.animal_id = a.id), 0)::int AS ledger,
             coalesce((SELECT json_agg(json_build_object('id', e.id, 'kind', e.kind, 'delta', e.delta,
                         'at', ${instant('e.happened_at')}, 'transfer', e.transfer_id))
