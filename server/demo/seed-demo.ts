@@ -5,6 +5,7 @@ import { settableClock } from '../platform/clock.ts'
 import type { Log } from '../platform/log.ts'
 import { seedFormulary } from './formulary.ts'
 import { demoPassword, demoPeople, seedPeople } from './people.ts'
+import { seedWater } from './water.ts'
 
 const seedLock = 4400_0003
 const historyDays = 90
@@ -29,6 +30,7 @@ export async function seedDemo(outside: {
     const actors = await seedPeople(composition)
     await composition.formulary.service.loadDefaults()
     await seedFormulary(composition, actors, now)
+    await seedWater(composition, { clock, now, people: actors })
     return true
   } finally {
     await runner.query('SELECT pg_advisory_unlock($1)', [seedLock])

@@ -74,27 +74,33 @@ export function createMeasurementsService(parts: WaterServiceParts) {
       await inTransaction(context, async (tx) => {
         const stamps = await recordedStamps(tx, facility, given.happenedAt)
         const body = await bodyOf(tx, parts, given.waterBodyId)
-        const entered: Json[] = []
-        for (const { reading, result } of checked) {
-          if (!result.ok) continue
-          const { parameter, entered: value, below, scale, canonicalValue, canonicalUnit } = result.value
-          const { created } = await repository.insertReading(tx, {
-            id: reading.id,
-            waterBodyId: body.id,
+        const rows = checked.flatMap(({ reading, result }) => {
+          if (!result.ok) return []
+          const { entered, ...value } = result.value
+          return [
+            {
+              id: reading.id,
+              waterBodyId: body.id,
+              ...value,
+              enteredValue: entered.value,
+              enteredUnit: entered.unit,
+              instrument: reading.instrument ?? null,
+              note: reading.note ?? null,
+              ...stamps,
+            },
+          ]
+        })
+        const created = await repository.insertReadings(tx, rows)
+        const entered = rows
+          .filter((row) => created.has(row.id))
+          .map(({ id, parameter, enteredValue: value, enteredUnit: unit, below, scale }) => ({
+            id,
             parameter,
-            enteredValue: value.value,
-            enteredUnit: value.unit,
+            value,
+            unit,
             below,
-            scale,
-            canonicalValue,
-            canonicalUnit,
-            instrument: reading.instrument ?? null,
-            note: reading.note ?? null,
-            ...stamps,
-          })
-          if (created)
-            entered.push({ id: reading.id, parameter, ...value, below, ...(scale ? { scale } : {}) })
-        }
+            ...(scale ? { scale } : {}),
+          }))
         if (entered.length > 0)
           tx.audit({
             action: 'reading.record',

@@ -1,5 +1,5 @@
 import type { EntityTarget, ObjectLiteral } from 'typeorm'
-import { insertOnce, updateVersioned } from '../../platform/database/rows.ts'
+import { insertManyOnce, insertOnce, updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Reading, WaterEvent, WaterRangeRecord } from './measurement.entity.ts'
 import { IsolationBody, IsolationEnd, IsolationRecord, IsolationTest } from './volume.entity.ts'
@@ -46,8 +46,9 @@ export function saveLifeSupport(tx: Tx, key: { id: string; version: number }, pa
   return updateVersioned(tx, LifeSupportUnit, key, patch)
 }
 
-export function insertReading(tx: Tx, row: Reading): Created {
-  return insertOnce(tx, Reading, row, [
+/** @returns the ids of those that are new */
+export function insertReadings(tx: Tx, rows: readonly Reading[]): Promise<Set<string>> {
+  return insertManyOnce(tx, Reading, rows, [
     'waterBodyId',
     'parameter',
     'enteredValue',

@@ -1,3 +1,4 @@
+import { In } from 'typeorm'
 import type { EntityTarget, ObjectLiteral } from 'typeorm'
 import { Problem } from '../http/problem.ts'
 import type { Tx } from './transactions.ts'
@@ -30,6 +31,9 @@ export async function updateVersioned<T extends ObjectLiteral & { id: string; ve
 const comparable = (value: unknown) =>
   JSON.stringify(value instanceof Date ? value.toISOString() : (value ?? null))
 
+const isSame = <T>(a: T, b: T, fields: readonly (keyof T)[]) =>
+  fields.every((field) => comparable(a[field]) === comparable(b[field]))
+
 /**
  * Whether a record under this id is there already with the same content: the same request sent again. With other
  * content the request is refused.
@@ -41,10 +45,8 @@ export async function isRepeated<T extends ObjectLiteral & { id: string }>(
 ): Promise<boolean> {
   const earlier = await tx.manager.findOneBy(target, { id: content.id } as never)
   if (!earlier) return false
-  const same = (Object.keys(content) as (keyof T)[]).every(
-    (field) => comparable(earlier[field]) === comparable(content[field]),
-  )
-  if (!same) throw new Problem('id-already-used')
+  if (!isSame<Partial<T>>(earlier, content, Object.keys(content) as (keyof T)[]))
+    throw new Problem('id-already-used')
   return true
 }
 
@@ -66,4 +68,26 @@ export async function insertOnce<T extends ObjectLiteral & { id: string }>(
   if (await isRepeated(tx, target, content as Partial<T> & { id: string })) return { created: false }
   await tx.manager.insert(target, row as never)
   return { created: true }
+}
+
+/**
+ * Writes several records under their own ids, each once, in two statements however many they are.
+ *
+ * @returns the ids that are new
+ */
+export async function insertManyOnce<T extends ObjectLiteral & { id: string }>(
+  tx: Tx,
+  target: EntityTarget<T>,
+  rows: readonly T[],
+  compare: readonly (keyof T)[],
+): Promise<Set<string>> {
+  const stored: T[] = await tx.manager.findBy(target, { id: In(rows.map((row) => row.id)) } as never)
+  const earlier = new Map(stored.map((row) => [row.id, row]))
+  const fresh = rows.filter((row) => !earlier.has(row.id))
+  for (const row of rows) {
+    const before = earlier.get(row.id)
+    if (before && !isSame(before, row, compare)) throw new Problem('id-already-used')
+  }
+  if (fresh.length > 0) await tx.manager.insert(target, fresh as never)
+  return new Set(fresh.map((row) => row.id))
 }
