@@ -19,7 +19,7 @@ export const animalRefusals = defineMessages({
   noSuchTaxon: 'There is no such taxon. Choose one from the list, or enter it first.',
   noSuchEnclosure: 'There is no such enclosure. Choose one from the list.',
   movementLocked: (p: { accession: string; by: string }) =>
-    `${p.accession} may not be moved: ${p.by}. A veterinarian lifts the lock. If it was moved all the same, record it as already happened, with the reason.`,
+    `${p.accession} is held: ${p.by}. A veterinarian lifts the hold. If it was moved all the same, record it as already happened, with the reason.`,
   breachOpen: (p: { accession: string }) =>
     `${p.accession} was moved against a rule, and a veterinarian has not explained it yet. If it was moved again, record it as already happened, with the reason.`,
   documentedTransferNeeded: (p: { accession: string; by: string; from: string; to: string }) =>

@@ -179,8 +179,8 @@ export const animalColumns = defineMessages({
 
 export const lockNames = defineMessages({
   none: 'free',
-  boundary: 'inside its quarantine boundary',
-  all: 'locked',
+  boundary: 'in quarantine',
+  all: 'held',
 })
 
 export const basisNames = defineMessages({

@@ -49,7 +49,7 @@ export const problemTitles = defineMessages({
   'not-in-that-enclosure': 'It is not in that enclosure',
   'contradicts-another-move': 'Another recorded move contradicts this',
   'enclosure-not-in-use': 'The enclosure was not in use at that time',
-  'movement-locked': 'Its movement is locked',
+  'movement-locked': 'It is held and may not be moved',
   'documented-transfer-needed': 'It may not leave its quarantine boundary',
   'part-of-another-record': 'This line belongs to another record',
   'not-a-group': 'This is for groups only',

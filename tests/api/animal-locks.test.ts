@@ -79,7 +79,7 @@ describe('quarantine locks', () => {
     await lock(ray.id, 'all')
     const reply = await move('veterinarian', ray.url, wing1, wing2, { documentedTransfer: 'it is needed' })
     expect([reply.status, reply.body.code]).toEqual([409, 'movement-locked'])
-    expect(reply.body.detail).toMatch(/A veterinarian lifts the lock/)
+    expect(reply.body.detail).toMatch(/A veterinarian lifts the hold/)
   })
 
   it('keep a move that was made all the same, mark it, ask a veterinarian, and lock what follows', async () => {

@@ -1,6 +1,7 @@
 import type { Accession } from '../../server/features/animals/index.ts'
 import type { Actor } from '../../server/platform/http/request-context.ts'
 import type { TestApi } from '../support/api.ts'
+import { anEnclosure } from './a-water.ts'
 
 export interface TestPlace {
   id: string
@@ -17,13 +18,15 @@ export async function aPlace(
   api: TestApi,
   given: { boundary?: string; inUseUntil?: string } = {},
 ): Promise<TestPlace> {
-  const id = api.nextId()
-  const code = `T-${String(++lastPlace)}`
-  await api.composition.parts.dataSource.query(
-    `INSERT INTO enclosures (id, code, name, kind, area, boundary, treatment_vessel, in_use_from, in_use_until, recorded_at)
-     VALUES ($1, $2, $3, 'tank', 'Kelp hall', $4, false, '2020-01-01', $5, '2020-01-01')`,
-    [id, code, `Tank ${code}`, given.boundary ?? null, given.inUseUntil ?? null],
-  )
+  const { id, code } = await anEnclosure(api, `T-${String(++lastPlace)}`, {
+    boundary: given.boundary ?? null,
+  })
+  // no screen takes an enclosure out of use yet
+  if (given.inUseUntil !== undefined)
+    await api.composition.parts.dataSource.query(`UPDATE enclosures SET in_use_until = $2 WHERE id = $1`, [
+      id,
+      given.inUseUntil,
+    ])
   return { id, code }
 }
 

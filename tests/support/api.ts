@@ -30,6 +30,7 @@ export interface TestApi {
   app: Express
   composition: Composition
   ownerUrl: string
+  runtimeUrl: string
   clock: ReturnType<typeof settableClock>
   /** A request of nobody. */
   anonymous(): ReturnType<typeof request>
@@ -99,6 +100,7 @@ export async function startApi(): Promise<TestApi> {
     app,
     composition,
     ownerUrl: database.ownerUrl,
+    runtimeUrl: database.runtimeUrl,
     clock,
     anonymous: () => request(app),
     as(role) {
