@@ -39,5 +39,5 @@ export function offsetWords(at: Date, zone: Zone): string {
   const part = new Intl.DateTimeFormat('en-US', { timeZone: zone, timeZoneName: 'shortOffset' })
     .formatToParts(at)
     .find(({ type }) => type === 'timeZoneName')
-  return (part?.value ?? 'UTC').replace('GMT', 'UTC').replace('-', '\u2212')
+  return (part?.value ?? 'UTC').replace('GMT', 'UTC').replace('+0', '').replace('-', '\u2212')
 }

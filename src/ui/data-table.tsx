@@ -238,7 +238,7 @@ function rowInReach(
   if (!body || !['ArrowDown', 'ArrowUp', 'Home', 'End'].includes(key)) return null
   if (from.matches('input, select, textarea')) return null
   const controls = (row: Element) => [...row.querySelectorAll<HTMLElement>('a, button')]
-  const rows = [...body.rows].filter((row) => controls(row).length > 0)
+  const rows = [...body.querySelectorAll('tr')].filter((row) => controls(row).length > 0)
   const at = rows.findIndex((row) => row.contains(from))
   if (at < 0) return null
   const to = { ArrowDown: at + 1, ArrowUp: at - 1, Home: 0, End: rows.length - 1 }[key] ?? at

@@ -1,6 +1,8 @@
 import { useEffect, useRef } from 'react'
 import type { RefObject } from 'react'
 
+const focusable = 'button, a[href], input, select, textarea, [tabindex="0"]'
+
 /**
  * Opens a native dialog while it is mounted and gives the focus back when it goes. The browser holds the focus inside
  * and makes the rest inert.
@@ -17,7 +19,9 @@ export function useModal(onBack: () => void): RefObject<HTMLDialogElement | null
     if (!node) return
     const before = document.activeElement
     if (!node.open) node.showModal()
-    node.querySelector<HTMLElement>('[data-first-focus]')?.focus()
+    const first = node.querySelector<HTMLElement>('[data-first-focus]')
+    if (first) first.focus()
+    else if (!node.contains(document.activeElement)) node.querySelector<HTMLElement>(focusable)?.focus()
     const onCancel = (event: Event) => {
       event.preventDefault()
       back.current()

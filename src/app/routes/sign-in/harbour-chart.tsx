@@ -15,7 +15,7 @@ export function HarbourChart({ children }: { children: ReactNode }) {
     <div className="graduated-border">
       <div className="harbour-chart">
         <svg viewBox={`0 0 ${width} ${height}`} preserveAspectRatio="xMidYMid slice" aria-hidden="true">
-          <path d={fiveMetres} fill="var(--shallow)" opacity=".75" fillRule="evenodd" />
+          <path d={fiveMetres} fill="var(--shallow)" opacity=".75" />
           <path d={fiveMetres} className="p-contour" />
           <path d={tenMetres} className="p-contour" strokeDasharray="7 3" />
           <path d={threeMetres} fill="var(--shallow-2)" opacity=".7" />

@@ -1,0 +1,165 @@
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { installation } from '../../server/platform/http/request-context.ts'
+import { password } from '../support/api.ts'
+import { expectAccessible } from '../support/axe.ts'
+import { launchChromium, newSession } from '../support/chromium.ts'
+import { startServedApp } from '../support/served-app.ts'
+import type { ServedApp } from '../support/served-app.ts'
+
+let browser: Browser
+let app: ServedApp
+
+beforeAll(async () => {
+  app = await startServedApp()
+  await app.as('keeper')
+  await app.as('veterinarian')
+  browser = await launchChromium()
+}, 180_000)
+afterAll(async () => {
+  await browser.close()
+  await app.stop()
+})
+
+const desk = { width: 1440, height: 900, expectedErrors: [/401 \(Unauthorized\)/, /429 \(Too Many/] }
+const phone = { ...desk, width: 390, height: 844 }
+
+async function signIn(page: Page, email: string, word = password): Promise<void> {
+  await page.getByRole('textbox', { name: 'E-mail' }).fill(email)
+  await page.getByRole('textbox', { name: 'Password' }).fill(word)
+  await page.getByRole('button', { name: 'Sign in' }).click()
+}
+
+describe.each([desk, phone])('sign-in at $width px', (size) => {
+  it('is reached from anywhere, says plainly what is wrong, and leads to where one wanted to go', async () => {
+    const { page } = await newSession(browser, size)
+    await page.goto(`${app.url}/settings/own`)
+    await page.waitForURL(/\/sign-in\?then=/)
+    await expectAccessible(page, 'sign-in')
+
+    await page.getByRole('button', { name: 'Sign in' }).click()
+    expect(await page.getByText(/Type your e-mail address/).isVisible()).toBe(true)
+    await expectAccessible(page, 'sign-in with faults')
+
+    await signIn(page, 'keeper@harrow-point.example', 'not-the-password')
+    await page.getByText('E-mail or password is not right.').waitFor()
+    await expectAccessible(page, 'sign-in refused')
+
+    await signIn(page, 'keeper@harrow-point.example')
+    await page.waitForURL(`${app.url}/settings/own`)
+    expect(await page.title()).toBe('Your own settings · Pratique')
+    await expectAccessible(page, 'own settings')
+    expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(size.width)
+  })
+})
+
+it('says the same of an account that is not there as of a wrong password, and says when it is locked', async () => {
+  const { page } = await newSession(browser, desk)
+  await page.goto(`${app.url}/sign-in`)
+  const alert = page.getByRole('alert')
+  await signIn(page, 'nobody@harrow-point.example', 'x')
+  await alert.waitFor()
+  const said = await alert.textContent()
+  await app.person({ email: 'locked@harrow-point.example', printedName: 'Lou Lock', roles: ['keeper'] })
+  for (let wrong = 1; wrong <= 5; wrong++) {
+    const answer = page.waitForResponse(/\/api\/sign-in$/)
+    await signIn(page, 'locked@harrow-point.example', `wrong-${String(wrong)}`)
+    await answer
+    if (wrong === 1) expect(await alert.textContent()).toBe(said)
+  }
+  const answer = page.waitForResponse(/\/api\/sign-in$/)
+  await signIn(page, 'locked@harrow-point.example')
+  expect((await answer).status()).toBe(429)
+  await page.getByText(/Too many wrong tries\. Wait 15 min/).waitFor()
+})
+
+it('asks for a password of one’s own after a one-time password, and lets nobody past it', async () => {
+  const { people } = app.composition
+  const { oneTimePassword } = await people.service.enterPerson(
+    { actor: installation, requestId: 'test' },
+    {
+      id: app.nextId(),
+      email: 'new@harrow-point.example',
+      printedName: 'Noor Newland',
+      roles: ['technician'],
+    },
+  )
+  expect(oneTimePassword).toBeTruthy()
+  const { page } = await newSession(browser, desk)
+  await page.goto(`${app.url}/sign-in`)
+  await signIn(page, 'new@harrow-point.example', oneTimePassword ?? '')
+  await page.waitForURL(/\/new-password$/)
+  await expectAccessible(page, 'new password')
+  await page.goto(`${app.url}/settings/own`)
+  await page.waitForURL(/\/new-password$/)
+
+  await page.getByLabel('One-time password').fill(oneTimePassword ?? '')
+  await page.getByLabel('New password', { exact: true }).fill('short')
+  await page.getByLabel('New password again').fill('other')
+  await page.getByRole('button', { name: 'Keep this password' }).click()
+  await page.getByText('Use at least 10 characters').first().waitFor()
+  await page.getByLabel('New password', { exact: true }).fill('salt-and-tide-9')
+  await page.getByLabel('New password again').fill('salt-and-tide-9')
+  await page.getByRole('button', { name: 'Keep this password' }).click()
+  await page.getByText('Your password is changed').waitFor()
+  expect(new URL(page.url()).pathname).not.toBe('/new-password')
+})
+
+describe('the frame', () => {
+  it('goes to every sheet by g and its number, and says honestly which are not there', async () => {
+    const { page } = await newSession(browser, desk)
+    await page.goto(`${app.url}/settings/own`)
+    await signIn(page, 'veterinarian@harrow-point.example')
+    await page.waitForURL(`${app.url}/settings/own`)
+    const sheets = page.getByRole('navigation', { name: 'Sheets' }).getByRole('link')
+    expect(await sheets.count()).toBe(8)
+    for (let number = 1; number <= 8; number++) {
+      const name = ((await sheets.nth(number - 1).textContent()) ?? '').replace(/^\d/, '')
+      await page.keyboard.press('g')
+      await page.keyboard.press(String(number))
+      await page.waitForFunction((title) => document.title.startsWith(title), name)
+      const missing = page.url().includes('/not-in-this-version/')
+      expect(await page.getByText(`${name} is not in this version`).isVisible()).toBe(missing)
+    }
+    await expectAccessible(page, 'a sheet')
+  })
+
+  it('opens finding and the list of keys, follows the chosen light, and signs out', async () => {
+    const { page } = await newSession(browser, desk)
+    await page.goto(`${app.url}/settings/own`)
+    await signIn(page, 'veterinarian@harrow-point.example')
+    await page.waitForURL(`${app.url}/settings/own`)
+    await page.keyboard.press('Control+k')
+    await page.getByRole('dialog', { name: 'Find' }).waitFor()
+    await page.keyboard.press('Escape')
+    await page.keyboard.press('?')
+    await page.getByRole('dialog', { name: 'Keys' }).waitFor()
+    await expectAccessible(page, 'list of keys')
+    await page.keyboard.press('Escape')
+
+    await page.getByRole('button', { name: 'Test veterinarian, menu' }).click()
+    await expectAccessible(page, 'menu of the person')
+    await page.getByRole('menuitemradio', { name: 'Night watch' }).click()
+    expect(await page.evaluate(() => document.documentElement.dataset.theme)).toBe('night')
+    await page.reload()
+    await page.getByRole('button', { name: 'Test veterinarian, menu' }).click()
+    expect(await page.evaluate(() => document.documentElement.dataset.theme)).toBe('night')
+    await expectAccessible(page, 'own settings, night watch')
+    await page.getByRole('menuitem', { name: 'Sign out' }).click()
+    await page.waitForURL(/\/sign-in/)
+    await page.goBack()
+    await page.waitForURL(/\/sign-in/)
+  })
+
+  it('puts the list of sheets behind the mark on a phone', async () => {
+    const { page } = await newSession(browser, phone)
+    await page.goto(`${app.url}/settings/own`)
+    await signIn(page, 'keeper@harrow-point.example')
+    await page.waitForURL(`${app.url}/settings/own`)
+    await page.getByRole('button', { name: /^Sheets/ }).click()
+    expect(await page.getByRole('menuitem').count()).toBe(8)
+    const row = await page.getByRole('menuitem').first().boundingBox()
+    expect(row?.height).toBeGreaterThanOrEqual(48)
+    await expectAccessible(page, 'list of sheets')
+  })
+})
