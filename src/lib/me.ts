@@ -1,4 +1,6 @@
-import { queryOptions, useQuery } from '@tanstack/react-query'
+import { createContext, useContext } from 'react'
+import { queryOptions } from '@tanstack/react-query'
+import type { QueryClient } from '@tanstack/react-query'
 import { signInAddresses } from '../../shared/contracts/sign-in.addresses.ts'
 import type { getMe, Me } from '../../shared/contracts/sign-in.contract.ts'
 import { api } from './api-client.ts'
@@ -19,9 +21,22 @@ export const meQuery = queryOptions({
   staleTime: 60_000,
 })
 
-/** The person who is signed in. Only below the frame of the application, where somebody is. */
+/** Set by the application around every screen that needs somebody to be signed in. */
+export const MeContext = createContext<Me | null>(null)
+
+/**
+ * The person who is signed in. It is read from around the screen, not from the store: when a session ends, the screen is
+ * taken away as a whole, and no part of it has to draw itself for nobody.
+ */
 export function useMe(): Me {
-  const { data } = useQuery(meQuery)
-  if (!data) throw new Error('useMe needs somebody to be signed in')
-  return data
+  const me = useContext(MeContext)
+  if (!me) throw new Error('useMe needs somebody to be signed in')
+  return me
+}
+
+/** Somebody else is there now, or nobody: who that is, and nothing that was read under the one before. */
+export function changePerson(client: QueryClient, me: Me | null): void {
+  client.setQueryData(meKey, me)
+  client.removeQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
+  client.getMutationCache().clear()
 }

@@ -16,6 +16,7 @@ import { Button } from '../../ui/button.tsx'
 import { PasswordField } from '../../ui/password-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { WithMe } from '../with-me.tsx'
 import { SignOutButton } from '../shell/sign-out-button.tsx'
 import { useSheetTitle } from '../shell/use-sheet-title.ts'
 import { SignInFrame } from './sign-in/sign-in-frame.tsx'
@@ -35,6 +36,14 @@ const Form = z
 
 /** The first thing after signing in with a one-time password. */
 export function Component() {
+  return (
+    <WithMe>
+      <NewPasswordForm />
+    </WithMe>
+  )
+}
+
+function NewPasswordForm() {
   useSheetTitle(signInWords.newTitle)
   const me = useMe()
   const client = useQueryClient()

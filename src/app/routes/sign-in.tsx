@@ -7,9 +7,9 @@ import type { signIn } from '../../../shared/contracts/sign-in.contract.ts'
 import { frameWords } from '../../../shared/messages/frame.ts'
 import { signInWords } from '../../../shared/messages/sign-in.ts'
 import { api } from '../../lib/api-client.ts'
+import { changePerson } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
-import { meKey } from '../../lib/query-client.ts'
 import { themeFor } from '../../lib/theme.ts'
 import { Button } from '../../ui/button.tsx'
 import { PasswordField } from '../../ui/password-field.tsx'
@@ -42,8 +42,7 @@ export function Component() {
     mutationFn: (body: { email: string; password: string }) =>
       api<typeof signIn>(signInAddresses.signIn, { body }),
     onSuccess: async (me) => {
-      client.clear()
-      client.setQueryData(meKey, me)
+      changePerson(client, me)
       themeFor(me.id, me.preferences.theme)
       await navigate(me.mustChangePassword ? paths.newPassword() : wantedAddress(window.location.href), {
         replace: true,

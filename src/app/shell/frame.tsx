@@ -1,11 +1,9 @@
 import { useEffect, useRef, useState } from 'react'
-import { useQuery } from '@tanstack/react-query'
 import { Anchor } from 'lucide-react'
 import { Navigate, Outlet, useLocation, useNavigate } from 'react-router-dom'
 import { frameWords } from '../../../shared/messages/frame.ts'
-import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
-import { meQuery } from '../../lib/me.ts'
+import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
 import { useSingleKeys } from '../../lib/preferences.ts'
 import { Banner } from '../../ui/banner.tsx'
@@ -17,19 +15,21 @@ import { SingleKeysContext } from '../../ui/single-keys-context.ts'
 import { SkipLink } from '../../ui/skip-link.tsx'
 import { useSheetKeys } from '../../ui/use-sheet-keys.ts'
 import { sheets } from '../sheets.ts'
+import { WithMe } from '../with-me.tsx'
 import { Bridge } from './bridge.tsx'
 import { useDueToday } from './due-today.ts'
 
-/** The frame around every sheet. When the session ends, wherever that is noticed, it leads to sign-in and back. */
+/** The frame around every sheet. */
 export function Frame() {
-  const { data: me } = useQuery(meQuery)
-  const location = useLocation()
-  if (!me) return <Navigate to={paths.signIn(location.pathname + location.search)} replace />
-  if (me.mustChangePassword) return <Navigate to={paths.newPassword()} replace />
-  return <SignedInFrame me={me} />
+  return (
+    <WithMe>
+      <SignedInFrame />
+    </WithMe>
+  )
 }
 
-function SignedInFrame({ me }: { me: Me }) {
+function SignedInFrame() {
+  const me = useMe()
   const [front, setFront] = useState<'find' | 'keys' | null>(null)
   const navigate = useNavigate()
   const now = useFacilityNow(me.facility.zone)
@@ -56,6 +56,7 @@ function SignedInFrame({ me }: { me: Me }) {
     window.scrollTo(0, 0)
   }, [pathname])
 
+  if (me.mustChangePassword) return <Navigate to={paths.newPassword()} replace />
   return (
     <SingleKeysContext value={singleKeys}>
       <HoursAboveContext value={due !== null}>

@@ -4,7 +4,7 @@ import { signInAddresses } from '../../../shared/contracts/sign-in.addresses.ts'
 import type { signOut } from '../../../shared/contracts/sign-in.contract.ts'
 import { api } from '../../lib/api-client.ts'
 import { paths } from '../../lib/paths.ts'
-import { meKey } from '../../lib/query-client.ts'
+import { changePerson } from '../../lib/me.ts'
 
 /** Ends the session and forgets everything that was read under it. */
 export function useSignOut() {
@@ -13,8 +13,7 @@ export function useSignOut() {
   return useMutation({
     mutationFn: () => api<typeof signOut>(signInAddresses.signOut, {}),
     onSuccess: async () => {
-      client.clear()
-      client.setQueryData(meKey, null)
+      changePerson(client, null)
       await navigate(paths.signIn(), { replace: true })
     },
   })

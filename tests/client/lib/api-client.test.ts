@@ -4,7 +4,8 @@ import { contract } from '../../../shared/contracts/contract.ts'
 import { getMe, signIn } from '../../../shared/contracts/sign-in.contract.ts'
 import { issueOneTimePassword, listPeople } from '../../../shared/contracts/people.contract.ts'
 import { addressOf, api, apiFile } from '../../../src/lib/api-client.ts'
-import { isProblem, ProblemError } from '../../../src/lib/problem-error.ts'
+import { isProblem } from '../../../src/lib/problem-error.ts'
+import type { ProblemError } from '../../../src/lib/problem-error.ts'
 
 const answers = (status: number, body: unknown, headers: Record<string, string> = {}) => {
   const text = typeof body === 'string' ? body : JSON.stringify(body)

@@ -33,7 +33,7 @@ const table = (more: Partial<DataTableProps<Row>> = {}) => (
   <DataTable label="Animals" columns={columns} rows={rows(3)} rowKey={(row) => row.id} {...more} />
 )
 const names = (place: HTMLElement) =>
-  [...place.querySelectorAll('tbody tr')].map((row) => row.cells[0]?.textContent)
+  [...place.querySelectorAll('tbody tr')].map((row) => row.firstElementChild?.textContent)
 
 describe('a list', () => {
   it('is a named table that says how many rows there are', async () => {

@@ -187,7 +187,7 @@ describe('for who does not see it', () => {
   it('gives the steps as a table', async () => {
     const { place } = await draw(<PassageTable view={ray()} />)
     const rows = [...place.querySelectorAll('tbody tr')]
-    expect(rows.map((row) => [...row.cells].map((cell) => cell.textContent))).toEqual([
+    expect(rows.map((row) => [...row.children].map((cell) => cell.textContent))).toEqual([
       ['step done', '3', '28\u00a0Apr', 'hands-on exam', ''],
       ['failed', '13', '8\u00a0May', 'bath', ''],
       ['due today', '19', 'today', 'skin scrape', ''],
