@@ -1,5 +1,5 @@
 import { ok, refuse, type Result } from '../result.ts'
-import { type FacilityDate, isFacilityDate } from '../time/instant.ts'
+import type { FacilityDate } from '../time/instant.ts'
 
 /** A permit as far as its use-up is judged. */
 export interface PermitTerms {
@@ -34,18 +34,18 @@ export interface PermitJudgement {
  *
  * @param terms    the permit
  * @param usedSoFar whole animals already taken under it, uses of voided transactions left out, 0 or more
- * @param use      day of the event (the last possible day, where only month or year is known), taxon, whole animals > 0
- * @refuses quantity-not-whole | not-a-date
+ * @param use      first and last day on which it may have happened (the same day, where the date is exact), taxon,
+ *                 whole animals > 0; a permit is said not to be valid only when it was on none of these days
+ * @refuses quantity-not-whole
  * @source common practice of permit keeping, no source
  */
 export function judgePermitUse(
   terms: PermitTerms,
   usedSoFar: number,
-  use: { on: FacilityDate; taxonId: string; quantity: number },
-): Result<PermitJudgement, 'quantity-not-whole' | 'not-a-date'> {
+  use: { first: FacilityDate; last: FacilityDate; taxonId: string; quantity: number },
+): Result<PermitJudgement, 'quantity-not-whole'> {
   if (!Number.isSafeInteger(use.quantity) || use.quantity <= 0)
     return refuse('quantity-not-whole', 'quantity')
-  if (!isFacilityDate(use.on)) return refuse('not-a-date', 'on')
   const { quantityAllowed } = terms
   const remainingBefore = quantityAllowed === null ? null : quantityAllowed - usedSoFar
   const remainingAfter = remainingBefore === null ? null : remainingBefore - use.quantity
@@ -53,8 +53,8 @@ export function judgePermitUse(
   const excess = Math.max(0, use.quantity - covered)
   const marks: PermitMark[] = []
   if (terms.voided) marks.push('voided')
-  if (use.on < terms.validFrom) marks.push('not-yet-valid')
-  if (use.on > terms.validUntil) marks.push('expired')
+  if (use.last < terms.validFrom) marks.push('not-yet-valid')
+  if (use.first > terms.validUntil) marks.push('expired')
   if (terms.taxonIds.length > 0 && !terms.taxonIds.includes(use.taxonId)) marks.push('other-taxon')
   if (excess > 0) marks.push('over-quantity')
   return ok({ remainingBefore, remainingAfter, excess, marks })
