@@ -3,7 +3,14 @@ import type { Tx } from '../../platform/database/transactions.ts'
 import { DocumentPrint, DocumentRecord, DocumentVoid } from './document.entity.ts'
 
 export function insertDocument(tx: Tx, row: DocumentRecord): Promise<{ created: boolean }> {
-  return insertOnce(tx, DocumentRecord, row, ['parentKind', 'parentId', 'title', 'kind', 'fileName', 'sha256'])
+  return insertOnce(tx, DocumentRecord, row, [
+    'parentKind',
+    'parentId',
+    'title',
+    'kind',
+    'fileName',
+    'sha256',
+  ])
 }
 
 export function findDocument(tx: Tx, id: string): Promise<DocumentRecord | null> {
