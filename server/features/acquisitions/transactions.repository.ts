@@ -29,3 +29,12 @@ export function isVoided(tx: Tx, transactionId: string): Promise<boolean> {
 export async function insertTransactionVoid(tx: Tx, row: TransactionVoid): Promise<void> {
   await tx.manager.insert(TransactionVoid, row)
 }
+
+/** The first line of an animal's count ledger: the one its accession wrote. */
+export async function firstEntryOf(tx: Tx, animalId: string): Promise<string> {
+  const [row]: [{ id: string }] = await tx.manager.query(
+    `SELECT e.id FROM count_entries e WHERE e.animal_id = $1 ORDER BY e.recorded_at, e.id LIMIT 1`,
+    [animalId],
+  )
+  return row.id
+}

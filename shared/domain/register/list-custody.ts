@@ -1,5 +1,6 @@
 import type { CountEntry, CountKind } from '../ledger/count-entry.ts'
 import type { CountStatement } from '../ledger/compute-group-count.ts'
+import { inTimeOrder } from '../ledger/list-running-counts.ts'
 import type { Move } from '../ledger/move.ts'
 import type { Instant } from '../time/instant.ts'
 import { compareInstants } from '../time/instant-arithmetic.ts'
@@ -41,7 +42,13 @@ export function listCustody(
   statements: readonly CountStatement[] = [],
 ): CustodyEvent[] {
   const joined = new Set<string>()
-  const counts = entries.map((entry): CustodyEvent => {
+  // Of several losses at one instant, it is the last of the ledger that empties the place
+  const order = [...entries].sort(inTimeOrder)
+  const arrivalsFirst = [
+    ...order.filter((entry) => entry.delta > 0),
+    ...order.filter((entry) => entry.delta < 0).reverse(),
+  ]
+  const counts = arrivalsFirst.map((entry): CustodyEvent => {
     const move = moves.find(
       (one) =>
         !joined.has(one.moveId) &&

@@ -84,6 +84,18 @@ describe('the custody of a group', () => {
     ])
   })
 
+  it('lets the last of several losses at one instant empty the place', () => {
+    const all = listCustody(
+      [entry('a', 'purchase', 2, 0), entry('b', 'death', -1, 9), entry('c', 'death', -1, 9)],
+      [move('m1', null, 'tub', 0), move('m2', 'tub', null, 9)],
+    )
+    expect(all.map(({ eventId, fromEnclosureId }) => [eventId, fromEnclosureId])).toEqual([
+      ['a', null],
+      ['b', null],
+      ['c', 'tub'],
+    ])
+  })
+
   it('stands in the order of the ledger at one instant: gains, moves, losses', () => {
     const all = listCustody(
       [entry('z', 'death', -1, 0), entry('y', 'purchase', 3, 0)],
