@@ -1,5 +1,6 @@
 import { buffer } from 'node:stream/consumers'
 import type { ExportFormat } from '../../../shared/domain/register/export-formats.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { csvStream } from '../../platform/csv/csv-stream.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import { historyCsv } from './history-csv.ts'
@@ -23,7 +24,7 @@ export async function makeHistoryFile(
   facts: PrintFacts,
   pdf: PdfPool,
 ): Promise<MadeFile> {
-  const name = `${content.accession}-${facts.printedAt.slice(0, 10)}`.replace(/[^\w.-]+/g, '-')
+  const name = `${content.accession}-${facilityDateOf(facts.printedAt, facts.zone)}`.replace(/[^\w.-]+/g, '-')
   const table = async (made: Parameters<typeof csvStream>[0]) => new Uint8Array(await buffer(csvStream(made)))
   switch (format) {
     case 'pdf': {
