@@ -1,18 +1,25 @@
 import path from 'node:path'
 import type { DataSource } from 'typeorm'
+import { createAcquisitions } from './features/acquisitions/index.ts'
 import { createAnimals } from './features/animals/index.ts'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
+import { createCounterparties } from './features/counterparties/index.ts'
+import { createDocuments } from './features/documents/index.ts'
+import { createExports } from './features/exports/index.ts'
 import { createFacility } from './features/facility/index.ts'
 import { createFormulary } from './features/formulary/index.ts'
 import { createPeople } from './features/people/index.ts'
+import { createPermits } from './features/permits/index.ts'
 import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
 import { createWater } from './features/water/index.ts'
 import type { Clock } from './platform/clock.ts'
 import { createTransactions } from './platform/database/transactions.ts'
+import { createFileStore } from './platform/files/file-store.ts'
 import { createIds } from './platform/ids.ts'
 import type { Log } from './platform/log.ts'
+import { createPdfPool } from './platform/pdf/pdf-pool.ts'
 import { createSigner } from './platform/signatures/signer.ts'
 import { createLockout } from './platform/sign-in/lockout.ts'
 
@@ -33,6 +40,8 @@ export function compose(outside: Outside) {
     ...outside,
     ids: createIds(clock),
     transactions: createTransactions({ dataSource, clock }),
+    files: createFileStore(path.join(outside.dataFolder, 'files')),
+    pdf: createPdfPool(),
   }
   const facility = createFacility(parts)
   const people = createPeople({ ...parts, facility: facility.service })
@@ -46,6 +55,18 @@ export function compose(outside: Outside) {
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
   const animals = createAnimals({ ...parts, facility: facility.service })
+  const documents = createDocuments(parts)
+  const counterparties = createCounterparties(parts)
+  const register = {
+    ...parts,
+    facility: facility.service,
+    counterparties: counterparties.service,
+    documents,
+    animals,
+  }
+  const permits = createPermits(register)
+  const acquisitions = createAcquisitions({ ...register, permits: permits.service })
+  const exports = createExports({ ...register, acquisitions })
   return {
     parts,
     authenticator,
@@ -56,6 +77,11 @@ export function compose(outside: Outside) {
     water,
     formulary,
     animals,
+    documents,
+    counterparties,
+    permits,
+    acquisitions,
+    exports,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -66,7 +92,14 @@ export function compose(outside: Outside) {
       ...water.routes,
       ...formulary.routes,
       ...animals.routes,
+      ...documents.routes,
+      ...counterparties.routes,
+      ...permits.routes,
+      ...acquisitions.routes,
+      ...exports.routes,
     ],
+    /** Ends what runs beside the requests. */
+    close: () => parts.pdf.close(),
   }
 }
 

@@ -1,8 +1,13 @@
+import { acquisitionEntities } from './features/acquisitions/index.ts'
 import { animalEntities } from './features/animals/index.ts'
 import { enclosureEntities } from './features/enclosures/index.ts'
+import { counterpartyEntities } from './features/counterparties/index.ts'
+import { documentEntities } from './features/documents/index.ts'
+import { exportEntities } from './features/exports/index.ts'
 import { facilityEntities } from './features/facility/index.ts'
 import { formularyEntities } from './features/formulary/index.ts'
 import { peopleEntities } from './features/people/index.ts'
+import { permitEntities } from './features/permits/index.ts'
 import { signingEntities } from './features/signing/index.ts'
 import { waterEntities } from './features/water/index.ts'
 
@@ -16,4 +21,9 @@ export const entities = [
   ...waterEntities,
   ...formularyEntities,
   ...animalEntities,
+  ...documentEntities,
+  ...counterpartyEntities,
+  ...permitEntities,
+  ...acquisitionEntities,
+  ...exportEntities,
 ]

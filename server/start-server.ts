@@ -57,6 +57,7 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
       await ended
       clearTimeout(hurry)
       close()
+      await composition.close()
       await dataSource.destroy()
     },
   }

@@ -1,6 +1,7 @@
 import { Foundation1764600000001 } from './0001-foundation.ts'
 import { Water1764600000002 } from './0002-water.ts'
 import { Animals1764600000003 } from './0003-animals.ts'
+import { Register1764600000004 } from './0004-register.ts'
 import { Signing1764600000010 } from './0010-signing.ts'
 import { Formulary1764600000012 } from './0012-formulary.ts'
 
@@ -10,6 +11,7 @@ export const migrations = [
   Foundation1764600000001,
   Water1764600000002,
   Animals1764600000003,
+  Register1764600000004,
   Signing1764600000010,
   Formulary1764600000012,
 ]

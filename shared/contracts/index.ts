@@ -1,11 +1,16 @@
 import type { Contract } from './contract.ts'
+import * as acquisitions from './acquisitions.contract.ts'
 import * as animalRecords from './animal-records.contract.ts'
 import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
+import * as counterparties from './counterparties.contract.ts'
+import * as documents from './documents.contract.ts'
+import * as exports from './exports.contract.ts'
 import * as facility from './facility.contract.ts'
 import * as formulary from './formulary.contract.ts'
 import * as people from './people.contract.ts'
+import * as permits from './permits.contract.ts'
 import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
 import * as water from './water.contract.ts'
@@ -30,6 +35,11 @@ const modules = [
   taxa,
   animals,
   animalRecords,
+  documents,
+  counterparties,
+  permits,
+  acquisitions,
+  exports,
 ]
 
 const isContract = (value: unknown): value is Contract =>

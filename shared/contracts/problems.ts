@@ -62,6 +62,11 @@ export const problemStatus = {
   'taxa-differ': 409,
   'mark-already-carried': 409,
   'already-resolved': 409,
+  'name-already-used': 409,
+  'already-voided': 409,
+  'already-explained': 409,
+  'permit-does-not-cover': 409,
+  'fingerprint-not-unique': 409,
   'outside-working-order': 500,
 } as const satisfies Record<string, number>
 

@@ -59,4 +59,9 @@ export const problemTitles = defineMessages({
   'taxa-differ': 'The two are of different taxa',
   'mark-already-carried': 'Another animal carries this mark',
   'already-resolved': 'Somebody has explained this already',
+  'name-already-used': 'This name is on file already',
+  'already-voided': 'This was already voided',
+  'already-explained': 'Somebody has explained this already',
+  'permit-does-not-cover': 'A permit does not cover this',
+  'fingerprint-not-unique': 'Several prints begin with these digits',
 })

@@ -113,6 +113,7 @@ export async function startApi(): Promise<TestApi> {
     nextId,
     async stop() {
       close()
+      await composition.close()
       await dataSource.destroy()
       await rm(dataFolder, { recursive: true, force: true })
     },

@@ -12,6 +12,10 @@ export type AcquisitionGiven = BodyOf<typeof recordAcquisition>
 export type DispositionGiven = BodyOf<typeof recordDisposition>
 export type Given = AcquisitionGiven | DispositionGiven
 
+type Line = Given['lines'][number]
+type NewLine = Extract<AcquisitionGiven['lines'][number], { record: 'new' }>
+const isNew = (line: Line): line is NewLine => 'record' in line && line.record === 'new'
+
 /**
  * What can be told of a transaction before anything is read: everything at fault at once.
  *
@@ -56,7 +60,7 @@ export function checkGiven(given: Given, way: 'in' | 'out', zone: string, now: s
     const at = `/lines/${String(index)}`
     if (animals.has(line.animalId)) wrong(`${at}/animalId`, says.lineTwice)
     animals.add(line.animalId)
-    if (!('record' in line) || line.record !== 'new') return
+    if (!isNew(line)) return
     if (line.form === 'individual' && (line.count !== 1 || line.estimate))
       wrong(`${at}/count`, says.individualIsOne)
     if (line.estimate && (line.estimate.low > line.count || line.estimate.high < line.count))

@@ -3,6 +3,7 @@ import type { ExportFormat } from '../../../shared/domain/register/export-format
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { csvStream } from '../../platform/csv/csv-stream.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
+import { spellUndrawable } from '../../platform/pdf/typeface.ts'
 import { historyCsv } from './history-csv.ts'
 import { historyDarwinCore } from './history-darwin-core.ts'
 import { historyDocument } from './history-document.ts'
@@ -13,6 +14,14 @@ export interface MadeFile {
   content: Uint8Array
   mediaType: string
   fileName: string
+}
+
+/** What people wrote in a script that the print's typeface lacks is spelled out: a history must always come out. */
+function drawable<T>(value: T): T {
+  if (typeof value === 'string') return spellUndrawable(value) as T
+  if (Array.isArray(value)) return value.map(drawable) as T
+  if (value === null || typeof value !== 'object') return value
+  return Object.fromEntries(Object.entries(value).map(([key, each]) => [key, drawable(each)])) as T
 }
 
 const csvType = 'text/csv; charset=utf-8'
@@ -28,7 +37,7 @@ export async function makeHistoryFile(
   const table = async (made: Parameters<typeof csvStream>[0]) => new Uint8Array(await buffer(csvStream(made)))
   switch (format) {
     case 'pdf': {
-      const bytes = await pdf.renderPdf(historyDocument(content, facts))
+      const bytes = await pdf.renderPdf(historyDocument(drawable(content), facts))
       return { content: bytes, mediaType: 'application/pdf', fileName: `${name}.pdf` }
     }
     case 'csv':

@@ -31,6 +31,12 @@ const byConstraint: Record<string, ProblemCode> = {
   ck_count_entries_individual: 'not-a-group',
   ex_stays_one_place: 'contradicts-another-move',
   uq_discrepancy_resolutions_discrepancy: 'already-resolved',
+  uq_counterparties_name: 'name-already-used',
+  ck_permits_period: 'period-reversed',
+  uq_document_voids_document: 'already-voided',
+  uq_permit_voids_permit: 'already-voided',
+  uq_transaction_voids_transaction: 'already-voided',
+  uq_permit_use_explanations_use: 'already-explained',
 }
 
 /** The problem for a broken constraint; null when none is foreseen, which is a bug and answers 500. */
