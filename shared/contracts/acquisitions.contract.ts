@@ -63,8 +63,8 @@ const shared = {
   counterpartyId: RecordId.nullish().describe('The other party'),
   newCounterparty: NewCounterparty.nullish().describe('The other party, entered with the transaction'),
   reference: optionalWords(120, 'Number on the other party’s paper: invoice, agreement, transfer form'),
-  place: PlaceGiven.nullish(),
-  transport: TransportGiven.nullish(),
+  place: PlaceGiven.nullish().describe('Where the animals were collected, found or released'),
+  transport: TransportGiven.nullish().describe('How the animals travelled'),
   loanDueOn: LocalDate.nullish().describe('Last day of a loan'),
   note: optionalWords(4000, 'Note'),
   permitUses: z
@@ -96,7 +96,7 @@ const NewAnimal = z
     birthDate: PartialDateText.nullish().describe('When'),
     birthApproximate: z.boolean().optional().describe('The date is an estimate'),
     count: AnimalCount.describe('Animals alive on arrival; 1 for an individual'),
-    estimate: Estimate.nullish(),
+    estimate: Estimate.nullish().describe('Set where the number is an estimate'),
     enclosureId: RecordId.describe('Enclosure they go into'),
     deadOnArrival: z.int().min(0).max(1_000_000).nullish().describe('Dead in the boxes, never accessioned'),
     theirNumber: optionalWords(100, 'Number it had with the other party'),
@@ -288,7 +288,15 @@ export const recordAcquisition = contract({
       .describe('The animals and groups'),
   }),
   reply: { 201: Transaction },
-  problems: ['id-already-used', 'in-the-future', 'not-found', 'permit-does-not-cover', 'name-already-used'],
+  problems: [
+    'id-already-used',
+    'in-the-future',
+    'not-found',
+    'permit-does-not-cover',
+    'name-already-used',
+    'not-a-group',
+    'enclosure-not-in-use',
+  ],
   idempotent: 'by-record-id',
 })
 
@@ -316,7 +324,15 @@ export const recordDisposition = contract({
       .describe('The animals and groups'),
   }),
   reply: { 201: Transaction },
-  problems: ['id-already-used', 'in-the-future', 'not-found', 'permit-does-not-cover', 'name-already-used'],
+  problems: [
+    'id-already-used',
+    'in-the-future',
+    'not-found',
+    'permit-does-not-cover',
+    'name-already-used',
+    'count-too-small',
+    'movement-locked',
+  ],
   idempotent: 'by-record-id',
 })
 
@@ -330,7 +346,7 @@ export const voidTransaction = contract({
   params: transactionParams,
   body: z.strictObject({ reason: Reason }),
   reply: { 200: Transaction },
-  problems: ['not-found', 'already-voided'],
+  problems: ['not-found', 'already-voided', 'later-records', 'count-too-small'],
   idempotent: 'by-key',
 })
 

@@ -55,7 +55,15 @@ export const PermitRow = z.object({
   used: z.int().describe('Whole animals taken under it'),
   remaining: z.int().nullable().describe('Animals left, negative when more were taken; null as above'),
   taxa: z
-    .array(z.object({ id: RecordId, commonName: z.string(), scientificName: z.string() }).describe('A taxon'))
+    .array(
+      z
+        .object({
+          id: RecordId,
+          commonName: z.string().describe('Common name'),
+          scientificName: z.string().describe('Scientific name'),
+        })
+        .describe('A taxon'),
+    )
     .describe('Taxa it is restricted to; empty: none is named'),
   openMarks: z.int().describe('Uses that it does not cover and that nobody has explained'),
   documents: z.int().describe('Papers on file'),

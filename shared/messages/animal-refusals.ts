@@ -47,6 +47,8 @@ export const animalRefusals = defineMessages({
   blankMark: 'Type the mark as read: letters or digits.',
   belongsToDeath: 'This line was written with a death. Strike out the death instead.',
   belongsToTransfer: 'This line is half of a split or merge. Merge the animals back instead.',
+  laterRecords: (p: { accession: string }) =>
+    `More is recorded of ${p.accession} since it came. Strike that out first, then void the transaction.`,
   belongsToRegister:
     'This line was written with a transaction of the register. Strike out the transaction instead.',
   onlyMovesInside:

@@ -21,6 +21,4 @@ export const registerSentences = defineMessages({
   lineTwice: 'The same animal or group stands in two lines.',
   notAGroup: 'Animals can be added to a group only.',
   noSuchAnimal: 'There is no such animal or group.',
-  laterRecords: (p: { accession: string }) =>
-    `More is recorded of ${p.accession} since it came. Strike that out first, then void the transaction.`,
 })

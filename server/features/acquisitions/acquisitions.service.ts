@@ -289,8 +289,13 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
         if (!transaction) throw new Problem('not-found')
         const lines = await repository.linesOf(tx, transaction.id)
         for (const { line } of inLockOrder(lines))
-          if (line.countEntryId !== null)
-            await animals.service.strikeCount(tx, { countEntryId: line.countEntryId, reason })
+          if (line.countEntryId !== null) {
+            const { strikeAccession, strikeCount } = animals.service
+            await (line.accessioned ? strikeAccession : strikeCount)(tx, {
+              countEntryId: line.countEntryId,
+              reason,
+            })
+          }
         if (await repository.isVoided(tx, transaction.id)) throw new Problem('already-voided')
         await repository.insertTransactionVoid(tx, {
           id: parts.ids.next(),

@@ -61,6 +61,9 @@ export interface CountChange {
   source: { kind: string; id: string }
 }
 
+/** Losses that nobody decides on; a lock on movement does not speak of them. */
+const befalls = new Set<CountKind>(['death', 'euthanasia', 'escape', 'theft', 'lost-from-count'])
+
 /** What the register and other features write of animals, inside a transaction of their own. */
 export function createAccession(parts: MoveParts & { moves: Moves; identify: Identify }) {
   const { facility, ledgers, moves } = parts
@@ -183,8 +186,10 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
         return { postedCount, excessCount: given.count - postedCount, created: false }
       }
       const leaves = countKinds[given.kind] === 'out'
-      if (leaves && !given.isFact) {
-        const locks = await readLocks(tx.manager, [animal.id], times.happenedAt)
+      const locks =
+        leaves && !befalls.has(given.kind) ? await readLocks(tx.manager, [animal.id], times.happenedAt) : []
+      const enclosureId = await ledgers.placeAt(tx, animal.id, times.happenedAt)
+      if (!given.isFact) {
         if (locks.length > 0)
           throw new Problem('movement-locked', {
             detail: animalRefusals.movementLocked({
@@ -226,6 +231,35 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
           reason: given.reason ?? undefined,
         },
       })
+      // A death is a death, whoever records it: quarantine and the chart find it where all deaths are
+      if (given.kind === 'death' || given.kind === 'euthanasia')
+        await repository.insertDeath(tx, {
+          id: parts.ids.next(),
+          animalId: animal.id,
+          kind: given.kind === 'death' ? 'died-seen' : 'euthanised',
+          seenCount: given.count,
+          postedCount: posted.postedCount,
+          countEntryId: posted.entryId,
+          enclosureId,
+          carcassState: null,
+          carcassPlace: null,
+          note: given.reason ?? null,
+          ...times,
+        })
+      if (locks.length > 0)
+        await ledgers.openDiscrepancy(tx, animal, {
+          kind: 'moved-under-lock',
+          source: given.source,
+          facts: {
+            from:
+              enclosureId === null
+                ? ''
+                : ((await animals.findEnclosures(tx, [enclosureId])).get(enclosureId)?.code ?? ''),
+            to: '',
+            reason: given.kind,
+          },
+          times,
+        })
       if (posted.excessCount > 0)
         await ledgers.openDiscrepancy(tx, animal, {
           kind: 'more-than-counted',
@@ -242,6 +276,36 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
       return { postedCount: posted.postedCount, excessCount: posted.excessCount, created: true }
     },
 
+    /**
+     * Strikes out an accession as a whole, first line, first count and arrival: the animal never came. Its number is
+     * not used again.
+     *
+     * @refuses later-records (anything else is recorded of its count or place)
+     */
+    async strikeAccession(tx: Tx, given: { countEntryId: string; reason: string }): Promise<void> {
+      const entry = await repository.findEntry(tx, given.countEntryId)
+      const animal = entry && (await animals.lockAnimals(tx, [entry.animalId])).get(entry.animalId)
+      if (!entry || !animal) throw new Problem('not-found')
+      if (await repository.isStruck(tx, 'countEntryId', entry.id)) return
+      const entries = await repository.readEntries(tx, animal.id)
+      const live = await repository.readLiveMoves(tx, animal.id)
+      const [arrival] = live
+      if (entries.length > 1 || live.length !== 1 || !arrival)
+        throw new Problem('later-records', {
+          detail: animalRefusals.laterRecords({ accession: animal.accession }),
+        })
+      const { reason } = given
+      await repository.strike(tx, { id: parts.ids.next(), what: 'countEntryId', rowId: entry.id, reason })
+      await repository.strike(tx, { id: parts.ids.next(), what: 'moveId', rowId: arrival.moveId, reason })
+      await ledgers.rebuildStays(tx, animal.id)
+      tx.audit({
+        action: 'animal.strike-accession',
+        subject: subjectOf(animal),
+        before: { kind: entry.kind, delta: entry.delta },
+        after: { reason },
+      })
+    },
+
     /** Strikes out a ledger line that another feature wrote, when that feature strikes its own record. */
     async strikeCount(tx: Tx, given: { countEntryId: string; reason: string }): Promise<void> {
       const entry = await repository.findEntry(tx, given.countEntryId)
@@ -255,6 +319,14 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
         rowId: entry.id,
         reason: given.reason,
       })
+      const deathId = await repository.findDeathOf(tx, entry.id)
+      if (deathId !== null)
+        await repository.strike(tx, {
+          id: parts.ids.next(),
+          what: 'deathId',
+          rowId: deathId,
+          reason: given.reason,
+        })
       tx.audit({
         action: 'animal.strike-count',
         subject: subjectOf(animal),

@@ -180,3 +180,8 @@ export function findDeath(tx: Tx, id: string): Promise<DeathRow | null> {
 export function isDeathEntry(tx: Tx, countEntryId: string): Promise<boolean> {
   return tx.manager.existsBy(DeathRow, { countEntryId })
 }
+
+/** The death that a line of the count ledger was written for; null for any other line. */
+export async function findDeathOf(tx: Tx, countEntryId: string): Promise<string | null> {
+  return (await tx.manager.findOneBy(DeathRow, { countEntryId }))?.id ?? null
+}
