@@ -216,7 +216,9 @@ describe('the use-up of a permit', () => {
       await registrar()
     )
       .post('/api/register/acquisitions')
-      .send(acquisitionBody(api, { kind: 'wild-collection', stage: 'now', on: '2026-12-01', lines, permitUses }))
+      .send(
+        acquisitionBody(api, { kind: 'wild-collection', stage: 'now', on: '2026-12-01', lines, permitUses }),
+      )
     expect(reply.body.errors).toMatchObject([{ pointer: '/permitUses/1/permitId', code: 'over-quantity' }])
     expect(await read(permit)).toMatchObject({ used: 0 })
   })
