@@ -40,6 +40,8 @@ export const identifierKindNames = defineMessages({
 } satisfies Record<IdentifierKind, string>)
 
 const animals = (count: number) => counted(count, 'animal', 'animals')
+const degrees = (value: number, positive: string, negative: string) =>
+  `${String(Math.abs(value))}°\u00a0${value < 0 ? negative : positive}`
 const party = (name: string | null) => name ?? 'a party not named'
 
 /** What a port of the passage says: one sentence for each kind of event. */
@@ -123,7 +125,7 @@ export const historyWords = defineMessages({
   collected: 'Collected',
   collectedOn: (p: { on: string }) => `Collected ${sayDate(p.on)}`,
   coordinates: (p: { latitude: number; longitude: number; uncertainty: number | null }) =>
-    `${String(p.latitude)}, ${String(p.longitude)} (WGS 84)${p.uncertainty === null ? '' : `, within ${String(p.uncertainty)}\u00a0m`}`,
+    `${degrees(p.latitude, 'N', 'S')}, ${degrees(p.longitude, 'E', 'W')} (WGS\u00a084)${p.uncertainty === null ? '' : `, within ${String(p.uncertainty)}\u00a0m`}`,
   ledger: 'Count ledger',
   date: 'Date',
   event: 'What happened',

@@ -67,7 +67,7 @@ function course(content: HistoryContent, facts: PrintFacts): DocumentBlock {
     return {
       when: origin.on === null ? '' : sayDate(origin.on),
       title,
-      text: details.join('. '),
+      text: details.join('; '),
       state: 'made' as const,
     }
   })
