@@ -24,7 +24,7 @@ export async function openDatabase(say) {
   return {
     own: true,
     env: { DATABASE_URL: cluster.url(), PRATIQUE_DATA, PRATIQUE_OWN_CLUSTER: '1' },
-    description: `PostgreSQL on 127.0.0.1:${cluster.port}, data in ${path.relative(process.cwd(), cluster.folder)}`,
+    description: `PostgreSQL on 127.0.0.1:${cluster.port}, data in ${cluster.folder}`,
     release: () => cluster.stop(),
   }
 }

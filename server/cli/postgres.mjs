@@ -14,11 +14,11 @@ import {
   statSync,
   writeFileSync,
 } from 'node:fs'
-import { createServer } from 'node:net'
 import os from 'node:os'
 import path from 'node:path'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { aptInstall } from './apt-install.mjs'
+import { freePort } from './free-port.mjs'
 import { accountForServer, findOrInstallPrograms, ownerOf } from './postgres-programs.mjs'
 import { hasForeignMarks, leaveMark, livingMarks, removeMark } from './process-marks.mjs'
 import { Advice, runCommand, tail } from './run-command.mjs'
@@ -319,18 +319,6 @@ export class Cluster {
         `see ${this.folder}/server.log`,
       )
   }
-}
-
-/** @returns {Promise<number>} */
-function freePort() {
-  return new Promise((resolve, reject) => {
-    const server = createServer()
-    server.on('error', reject)
-    server.listen(0, '127.0.0.1', () => {
-      const address = server.address()
-      server.close(() => resolve(typeof address === 'object' && address ? address.port : 0))
-    })
-  })
 }
 
 /** Stops and removes the scratch clusters of test runs that were killed. */

@@ -1,11 +1,11 @@
 import { spawn } from 'node:child_process'
 import type { ChildProcess } from 'node:child_process'
 import { chmodSync, existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
-import { createServer } from 'node:net'
 import os from 'node:os'
 import path from 'node:path'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
+import { freePort } from '../../server/cli/free-port.mjs'
 import { projectRoot } from '../support/project-files.ts'
 
 // The real `npm start` with a data folder of its own: what a person sees who starts, stops or kills it.
@@ -34,15 +34,6 @@ afterEach(async () => {
 })
 
 afterAll(() => rmSync(data, { recursive: true, force: true }))
-
-function freePort(): Promise<number> {
-  return new Promise((resolve) => {
-    const server = createServer().listen(0, '127.0.0.1', () => {
-      const address = server.address()
-      server.close(() => resolve(typeof address === 'object' && address ? address.port : 0))
-    })
-  })
-}
 
 function run(command: string, args: string[]): Started {
   const env = {
