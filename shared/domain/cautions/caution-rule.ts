@@ -1,0 +1,92 @@
+import type { SourceKey, SourceMark } from '../sources.ts'
+import type { FacilityDate } from '../time/instant.ts'
+import type { UnitCode } from '../units/unit-table.ts'
+import type { CautionCode, CautionParams, ResolveCode } from './caution-code.ts'
+import type { CautionFacts, FactPath } from './caution-facts.ts'
+import type { CautionParam } from './caution-param.ts'
+
+export const cautionLevels = ['stop', 'warning', 'note'] as const
+export type CautionLevel = (typeof cautionLevels)[number]
+
+/** `design`: while writing and at signing. `start`: before the dose. A rule is judged at one of them, or at both. */
+export type CautionStage = 'design' | 'start'
+
+export const cautionRuleIds = [
+  'R01', 'R02', 'R03', 'R04', 'R05', 'R06', 'R07', 'R08', 'R09', 'R10', 'R11', 'R12', 'R13', 'R14', 'R15', 'R16',
+  'R17', 'R22', 'R23', 'R24', 'R26', 'R27', 'R28', 'R31', 'R32', 'R34', 'R39', 'R41', 'R42',
+] as const
+export type CautionRuleId = (typeof cautionRuleIds)[number]
+
+/** Something that a caution brings with it besides its level. */
+export type CautionEffect = { kind: 'secondCalculation' }
+
+/** A threshold of a rule: a facility setting with a default. */
+export interface RuleParameter {
+  default: number
+  unit: UnitCode | 'factor' | 'count'
+  source: SourceKey
+  mark: SourceMark
+  /** Which way the facility may move it freely; the other way loosens the rule. */
+  tighter: 'lower' | 'higher'
+}
+
+/** A facility's own value, with whoever confirmed it. */
+export interface ConfirmedParameter {
+  value: number
+  confirmedBy: string
+  confirmedOn: FacilityDate
+  reason: string
+  jurisdiction: string
+}
+
+/** Facility values by rule and parameter; what is absent keeps its default. */
+export type CautionSettings = Partial<Record<CautionRuleId, Record<string, ConfirmedParameter>>>
+
+export interface RuleSource {
+  source: SourceKey
+  mark: SourceMark
+}
+
+/** What a rule found; the evaluator adds who it was. */
+export type CautionFinding = {
+  [Code in CautionCode]: {
+    code: Code
+    level: CautionLevel
+    params: CautionParams[Code]
+    /** Any one of these would do. */
+    resolvedBy: readonly ResolveCode[]
+    /** Facts that were not known and made the difference. */
+    unknown?: readonly FactPath[]
+    effects?: readonly CautionEffect[]
+  }
+}[CautionCode]
+
+/** A cross-check of an order or a dose. Total: whatever the facts, it answers and never throws. */
+export interface CautionRule {
+  id: CautionRuleId
+  levels: readonly CautionLevel[]
+  when: CautionStage | 'both'
+  overridable: boolean
+  parameters: Readonly<Record<string, RuleParameter>>
+  /** The facts it looks at; a test holds it to them. */
+  uses: readonly FactPath[]
+  sources: readonly RuleSource[]
+  /** Whether the rule has anything to do with this order at all; decides which conditions are printed. */
+  concerns(facts: CautionFacts): boolean
+  judge(facts: CautionFacts, parameters: Record<string, number>, stage: CautionStage): CautionFinding[]
+  /** Of a start rule: what its condition says, beside the resolved parameters. */
+  condition?(facts: CautionFacts, parameters: Record<string, number>): Record<string, CautionParam>
+}
+
+/**
+ * A rule, with its parameters known by name inside its functions.
+ */
+export function defineRule<const P extends Record<string, RuleParameter>>(
+  rule: Omit<CautionRule, 'parameters' | 'judge' | 'condition'> & {
+    parameters: P
+    judge(facts: CautionFacts, parameters: Record<keyof P, number>, stage: CautionStage): CautionFinding[]
+    condition?(facts: CautionFacts, parameters: Record<keyof P, number>): Record<string, CautionParam>
+  },
+): CautionRule {
+  return rule as CautionRule
+}

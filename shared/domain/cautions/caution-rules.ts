@@ -1,0 +1,63 @@
+import type { CautionRule } from './caution-rule.ts'
+import { formalinOxygen } from './rules/r01-formalin-oxygen.ts'
+import { formalinOxygenDemand } from './rules/r02-formalin-oxygen-demand.ts'
+import { formalinPond } from './rules/r03-formalin-pond.ts'
+import { formalinTime } from './rules/r04-formalin-time.ts'
+import { formalinCeiling } from './rules/r05-formalin-ceiling.ts'
+import { formalinWarmWater } from './rules/r06-formalin-warm-water.ts'
+import { formalinStorage } from './rules/r07-formalin-storage.ts'
+import { formalinPermanganate } from './rules/r08-formalin-permanganate.ts'
+import { copperInvertebrates } from './rules/r09-copper-invertebrates.ts'
+import { copperAlkalinity } from './rules/r10-copper-alkalinity.ts'
+import { copperFreshDose } from './rules/r11-copper-fresh-dose.ts'
+import { copperMarineLevel } from './rules/r12-copper-marine-level.ts'
+import { copperForms } from './rules/r13-copper-forms.ts'
+import { carbon } from './rules/r14-carbon.ts'
+import { ozoneAndUv } from './rules/r15-ozone-and-uv.ts'
+import { foamFractionator } from './rules/r16-foam-fractionator.ts'
+import { chloroquine } from './rules/r17-chloroquine.ts'
+import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
+import { chloramineWater } from './rules/r23-chloramine-water.ts'
+import { permanganate } from './rules/r24-permanganate.ts'
+import { defaultRange } from './rules/r26-default-range.ts'
+import { basis } from './rules/r27-basis.ts'
+import { doseSpacing } from './rules/r28-dose-spacing.ts'
+import { staleReadings } from './rules/r31-stale-readings.ts'
+import { volume } from './rules/r32-volume.ts'
+import { lot } from './rules/r34-lot.ts'
+import { secondCalculation } from './rules/r39-second-calculation.ts'
+import { weakAnimals } from './rules/r41-weak-animals.ts'
+import { firstUse } from './rules/r42-first-use.ts'
+
+/** Every rule, in the order of its number, which is also the order of equal cautions on screen. */
+export const cautionRules: readonly CautionRule[] = [
+  formalinOxygen,
+  formalinOxygenDemand,
+  formalinPond,
+  formalinTime,
+  formalinCeiling,
+  formalinWarmWater,
+  formalinStorage,
+  formalinPermanganate,
+  copperInvertebrates,
+  copperAlkalinity,
+  copperFreshDose,
+  copperMarineLevel,
+  copperForms,
+  carbon,
+  ozoneAndUv,
+  foamFractionator,
+  chloroquine,
+  peroxideSpecies,
+  chloramineWater,
+  permanganate,
+  defaultRange,
+  basis,
+  doseSpacing,
+  staleReadings,
+  volume,
+  lot,
+  secondCalculation,
+  weakAnimals,
+  firstUse,
+]

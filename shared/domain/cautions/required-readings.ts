@@ -1,0 +1,60 @@
+import type { AgentCode } from '../formulary/agent.ts'
+import type { CautionFacts, FactPath } from './caution-facts.ts'
+import type { Fact } from './fact.ts'
+import { valueOf } from './fact.ts'
+import type { ReadingName } from './reading-name.ts'
+
+const byAgent: Record<AgentCode, { always: readonly ReadingName[]; fresh?: readonly ReadingName[]; marine?: readonly ReadingName[] }> = {
+  formalin: { always: ['oxygen', 'temperature'] },
+  'copper-sulfate': { always: ['pH'], fresh: ['alkalinity'], marine: ['free-copper'] },
+  'chelated-copper': { always: ['pH', 'total-copper'] },
+  chloroquine: { always: ['temperature'] },
+  praziquantel: { always: ['oxygen', 'temperature'] },
+  'hydrogen-peroxide': { always: ['oxygen', 'temperature'] },
+  'chloramine-t': { always: ['oxygen', 'pH', 'alkalinity'] },
+  tricaine: { always: ['oxygen', 'pH', 'temperature'] },
+  'sodium-chloride': { always: ['temperature'] },
+  'potassium-permanganate': { always: ['oxygen', 'pH'] },
+  'methylene-blue': { always: ['oxygen'] },
+  metronidazole: { always: ['temperature'] },
+  oxytetracycline: { always: ['pH', 'temperature'] },
+  fenbendazole: { always: ['temperature'] },
+}
+
+/**
+ * The readings of the water that an agent asks for before a dose. Water of unknown kind asks for those of both kinds.
+ *
+ * @source project-default: the rule (R31) names the readings, which agent needs which is ours
+ */
+export function requiredReadings(facts: CautionFacts): readonly ReadingName[] {
+  const { always, fresh = [], marine = [] } = byAgent[facts.agent]
+  const kind = valueOf(facts.water.kind)
+  const isFresh = kind === null || kind === 'fresh' || kind === 'brackish'
+  const isMarine = kind === null || kind === 'marine' || kind === 'brackish'
+  return [...always, ...(isFresh ? fresh : []), ...(isMarine ? marine : [])]
+}
+
+export const readingFacts: Record<ReadingName, FactPath> = {
+  oxygen: 'water.oxygenMgPerL',
+  temperature: 'water.temperatureC',
+  pH: 'water.pH',
+  alkalinity: 'water.alkalinityMgPerLCaCO3',
+  hardness: 'water.hardnessMgPerLCaCO3',
+  'free-copper': 'water.freeCopperMgPerL',
+  'total-copper': 'water.totalCopperMgPerL',
+}
+
+/** The reading of a name. */
+export function readingFact(facts: CautionFacts, name: ReadingName): Fact<number> {
+  const { water } = facts
+  const all: Record<ReadingName, Fact<number>> = {
+    oxygen: water.oxygenMgPerL,
+    temperature: water.temperatureC,
+    pH: water.pH,
+    alkalinity: water.alkalinityMgPerLCaCO3,
+    hardness: water.hardnessMgPerLCaCO3,
+    'free-copper': water.freeCopperMgPerL,
+    'total-copper': water.totalCopperMgPerL,
+  }
+  return all[name]
+}

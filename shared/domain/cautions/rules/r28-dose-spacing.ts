@@ -1,0 +1,60 @@
+import { hoursBetween } from '../../time/instant-arithmetic.ts'
+import { doseWindow } from '../../schedule/dose-window.ts'
+import { type CautionFinding, defineRule } from '../caution-rule.ts'
+import { valueOf } from '../fact.ts'
+
+/**
+ * A dose outside its window, or past the planned number, counted in true hours since the last one given.
+ * Reading-driven additions are spaced by their own signed limits.
+ */
+export const doseSpacing = defineRule({
+  id: 'R28',
+  levels: ['warning', 'stop'],
+  when: 'both',
+  overridable: true,
+  parameters: {
+    veryEarlyFactor: { default: 0.5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'higher' },
+  },
+  uses: ['order.spacing', 'order.startsAt'],
+  sources: [
+    { source: 'hyatt-2017', mark: 'V' },
+    { source: 'project-default', mark: 'P' },
+  ],
+  concerns: ({ order }) => valueOf(order.spacing)?.readingDriven !== true,
+  judge(facts, { veryEarlyFactor }, stage) {
+    const spacing = valueOf(facts.order.spacing)
+    if (!spacing || spacing.readingDriven) return []
+    const found: CautionFinding[] = []
+    const { givenDoses, plannedDoses, intervalHours, lastGivenAt } = spacing
+    if (stage === 'start' && givenDoses >= plannedDoses)
+      found.push({
+        code: 'doses-past-plan',
+        level: 'stop',
+        params: { given: givenDoses, planned: plannedDoses },
+        resolvedBy: ['amend-order'],
+      })
+    const doseAt = stage === 'start' ? facts.at : valueOf(facts.order.startsAt)
+    if (lastGivenAt === null || doseAt === null || !(intervalHours > 0)) return found
+    const { earlyHours, lateHours } = doseWindow(intervalHours)
+    const hours = hoursBetween(lastGivenAt, doseAt)
+    const earliestHours = intervalHours - earlyHours
+    const latestHours = intervalHours + lateHours
+    if (hours < intervalHours * veryEarlyFactor)
+      found.push({
+        code: 'dose-very-early',
+        level: 'stop',
+        params: { hours, intervalHours },
+        resolvedBy: ['wait-for-window', 'amend-order'],
+      })
+    else if (hours < earliestHours)
+      found.push({
+        code: 'dose-early',
+        level: 'warning',
+        params: { hours, earliestHours },
+        resolvedBy: ['wait-for-window'],
+      })
+    else if (hours > latestHours)
+      found.push({ code: 'dose-late', level: 'warning', params: { hours, latestHours }, resolvedBy: ['amend-order'] })
+    return found
+  },
+})

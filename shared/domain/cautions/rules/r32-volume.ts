@@ -1,0 +1,60 @@
+import type { AgentCode } from '../../formulary/agent.ts'
+import { facilityDateOf } from '../../time/facility-date.ts'
+import { type CautionFinding, type CautionLevel, defineRule } from '../caution-rule.ts'
+import { exceeds } from '../exceeds.ts'
+import { valueOf } from '../fact.ts'
+
+const narrowMargin: readonly AgentCode[] = ['formalin', 'copper-sulfate', 'tricaine']
+
+/** An error of the volume is an error of the dose. */
+export const volume = defineRule({
+  id: 'R32',
+  levels: ['warning', 'stop'],
+  when: 'both',
+  overridable: true,
+  parameters: {
+    maxAgeMonths: { default: 12, unit: 'count', source: 'project-default', mark: 'P', tighter: 'lower' },
+    maxErrorPercent: { default: 10, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
+  },
+  uses: ['volume.determination'],
+  sources: [
+    { source: 'extension-sheets', mark: 'V' },
+    { source: 'project-default', mark: 'P' },
+  ],
+  concerns: () => true,
+  judge(facts, { maxAgeMonths, maxErrorPercent }) {
+    const level: CautionLevel = narrowMargin.includes(facts.agent) ? 'stop' : 'warning'
+    const determined = valueOf(facts.volume.determination)
+    if (!determined)
+      return [
+        {
+          code: 'volume-unknown',
+          level,
+          params: {},
+          resolvedBy: ['determine-volume'],
+          unknown: ['volume.determination'],
+        },
+      ]
+    const found: CautionFinding[] = []
+    const base = { level, resolvedBy: ['determine-volume'] } as const
+    const { determinedOn, displacementSubtracted, errorPercent, holdsForValves, method } = determined
+    if (!holdsForValves) found.push({ ...base, code: 'volume-other-valves', params: { determinedOn } })
+    // A meter and a dilution see only the water, so nothing has to be taken off.
+    if (!displacementSubtracted && (method === 'geometry' || method === 'estimated'))
+      found.push({ ...base, code: 'volume-gross', params: { determinedOn } })
+    if (facilityDateOf(facts.at, facts.zone) > addMonths(determinedOn, maxAgeMonths))
+      found.push({ ...base, code: 'volume-old', params: { determinedOn, limitMonths: maxAgeMonths } })
+    if (method === 'estimated' && errorPercent === null)
+      found.push({ ...base, code: 'volume-estimated-error-unknown', params: { limitPercent: maxErrorPercent } })
+    if (method === 'estimated' && errorPercent !== null && exceeds(errorPercent, maxErrorPercent))
+      found.push({ ...base, code: 'volume-estimated', params: { errorPercent, limitPercent: maxErrorPercent } })
+    return found
+  },
+})
+
+/** The same day so many months later; as text to compare with, so that 31 + 1 month need not exist. */
+function addMonths(date: string, months: number): string {
+  const [year = '0', month = '1', day = '1'] = date.split('-')
+  const all = Number(year) * 12 + Number(month) - 1 + Math.floor(months)
+  return `${String(Math.floor(all / 12)).padStart(4, '0')}-${String((all % 12) + 1).padStart(2, '0')}-${day}`
+}
