@@ -67,6 +67,31 @@ export const sources = {
     mark: 'V2',
   },
 
+  'ufifas-fa37': {
+    citation:
+      'UF/IFAS Extension FA37, Francis-Floyd and Klinger: potassium permanganate, as restated elsewhere',
+    mark: 'V2',
+  },
+  'extension-sheets': {
+    citation: 'University extension sheets on baths: a wrong volume is a wrong dose',
+    mark: 'V',
+  },
+  'hyatt-2017': {
+    citation: 'Hyatt et al. 2017, Journal of Zoo and Wildlife Medicine 48(2): a drug that accumulated',
+    mark: 'V',
+  },
+  'treatment-practice': { citation: 'Common practice of aquatic medicine, from memory', mark: 'M' },
+  'formalin-density': {
+    citation:
+      'Density of 37 % formaldehyde solution, 1.08 g/mL, from memory; the lot’s own where it is known',
+    mark: 'M',
+  },
+  'dose-arithmetic': {
+    citation:
+      'Computed: one figure on two bases differs by factors of 0.25 (copper), 0.37 (formalin), 0.62 (chloroquine)',
+    mark: 'C',
+  },
+
   'quarantine-practice': {
     citation:
       'Public quarantine standard of an accreditation body: at least 30 days under veterinary supervision; further ' +

@@ -22,7 +22,12 @@ export interface CautionParams {
   'pond-bloom-unknown': Record<never, never>
   'pond-striped-bass': { animals: readonly NamedAnimal[] }
   'formalin-too-long': { minutes: number; limitMinutes: number; row: FormalinRow }
-  'formalin-too-long-for-strength': { minutes: number; limitMinutes: number; target: CautionQuantity; limit: CautionQuantity }
+  'formalin-too-long-for-strength': {
+    minutes: number
+    limitMinutes: number
+    target: CautionQuantity
+    limit: CautionQuantity
+  }
   'formalin-indefinite': { target: CautionQuantity; limit: CautionQuantity }
   'formalin-indefinite-not-allowed': { limitMinutes: number; row: FormalinRow }
   'formalin-time-unknown': { limitMinutes: number }
@@ -44,7 +49,11 @@ export interface CautionParams {
     temperature: CautionQuantity
     boundary: CautionQuantity
   }
-  'formalin-temperature-unknown': { target: CautionQuantity; limit: CautionQuantity; boundary: CautionQuantity }
+  'formalin-temperature-unknown': {
+    target: CautionQuantity
+    limit: CautionQuantity
+    boundary: CautionQuantity
+  }
   'formalin-storage-fault': Record<never, never>
   'formalin-storage-unknown': Record<never, never>
   'formalin-and-permanganate': { orderNumber: string; hours: number; limitHours: number }
@@ -132,12 +141,7 @@ export type CautionCode = keyof CautionParams
 
 /** Rows of the label of formalin that a caution may name. */
 export type FormalinRow =
-  | 'finfish'
-  | 'egg'
-  | 'sturgeon-egg'
-  | 'penaeid-tank'
-  | 'penaeid-pond'
-  | 'inhabitants-unknown'
+  'finfish' | 'egg' | 'sturgeon-egg' | 'penaeid-tank' | 'penaeid-pond' | 'inhabitants-unknown'
 
 export type SecondCalculationCause = 'hazard' | 'volume' | 'amount' | 'not-known'
 

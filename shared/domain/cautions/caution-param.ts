@@ -1,10 +1,19 @@
 import type { UnitCode } from '../units/unit-table.ts'
+import type { ReadingName } from './reading-name.ts'
 
 /** A figure in a caution, said to be a dose or a reading. */
 export interface CautionQuantity {
   quantity: 'dose' | 'reading'
   value: number
   unit: UnitCode
+  /** Digits as an instrument showed them; without them the value is drawn to the places of its unit. */
+  digits?: string
+}
+
+/** A water test that has to be fresh, and how fresh. */
+export interface RequiredTest {
+  reading: ReadingName
+  maxAgeMinutes: number
 }
 
 /** An animal named in a caution. */
@@ -15,7 +24,8 @@ export interface NamedAnimal {
 }
 
 /** Anything that stands in a caution's sentence. */
-export type CautionParam = string | number | CautionQuantity | readonly NamedAnimal[] | readonly string[]
+export type CautionParam =
+  string | number | CautionQuantity | readonly NamedAnimal[] | readonly RequiredTest[] | readonly string[]
 
 /** A figure that follows the rules for doses: a target, a limit of a dose, a strength. */
 export function doseOf(value: number, unit: UnitCode): CautionQuantity {
@@ -23,6 +33,6 @@ export function doseOf(value: number, unit: UnitCode): CautionQuantity {
 }
 
 /** A figure that was measured, or a limit to compare a measurement with. */
-export function readingOf(value: number, unit: UnitCode): CautionQuantity {
-  return { quantity: 'reading', value, unit }
+export function readingOf(value: number, unit: UnitCode, digits?: string): CautionQuantity {
+  return { quantity: 'reading', value, unit, ...(digits === undefined ? {} : { digits }) }
 }

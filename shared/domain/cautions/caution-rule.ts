@@ -12,13 +12,99 @@ export type CautionLevel = (typeof cautionLevels)[number]
 export type CautionStage = 'design' | 'start'
 
 export const cautionRuleIds = [
-  'R01', 'R02', 'R03', 'R04', 'R05', 'R06', 'R07', 'R08', 'R09', 'R10', 'R11', 'R12', 'R13', 'R14', 'R15', 'R16',
-  'R17', 'R22', 'R23', 'R24', 'R26', 'R27', 'R28', 'R31', 'R32', 'R34', 'R39', 'R41', 'R42',
+  'R01',
+  'R02',
+  'R03',
+  'R04',
+  'R05',
+  'R06',
+  'R07',
+  'R08',
+  'R09',
+  'R10',
+  'R11',
+  'R12',
+  'R13',
+  'R14',
+  'R15',
+  'R16',
+  'R17',
+  'R22',
+  'R23',
+  'R24',
+  'R26',
+  'R27',
+  'R28',
+  'R31',
+  'R32',
+  'R34',
+  'R39',
+  'R41',
+  'R42',
 ] as const
 export type CautionRuleId = (typeof cautionRuleIds)[number]
 
 /** Something that a caution brings with it besides its level. */
 export type CautionEffect = { kind: 'secondCalculation' }
+
+/** The rules that are judged only at the start: on an order each is a condition. */
+export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R31', 'R34', 'R39', 'R41'] as const
+export type StartRuleId = (typeof startRuleIds)[number]
+
+/** Thresholds by name; one name means the same in every rule, so one catalogue words them all. */
+export const ruleParameterKeys = [
+  'oxygenFloorMgPerL',
+  'oxygenMaxAgeMinutes',
+  'productMgPerMgOxygen',
+  'startMaxAgeMinutes',
+  'designMaxAgeHours',
+  'warmestC',
+  'windowHours',
+  'finfishMinutes',
+  'indefiniteUlPerL',
+  'eggMinutes',
+  'penaeidMinutesPerDay',
+  'salmonidWarmUlPerL',
+  'finfishUlPerL',
+  'salmonidBoundaryC',
+  'eggUlPerL',
+  'sturgeonEggUlPerL',
+  'penaeidTankUlPerL',
+  'penaeidPondUlPerL',
+  'boundaryC',
+  'capProductMgPerL',
+  'apartHours',
+  'floorMgPerLCaCO3',
+  'maxAgeHours',
+  'capMgPerL',
+  'alkalinityDivisor',
+  'lowMgPerL',
+  'highMgPerL',
+  'stopMgPerL',
+  'eggsFromDtu',
+  'eggsToDtu',
+  'warmC',
+  'lowestPh',
+  'highestPh',
+  'hardMgPerLCaCO3',
+  'totalMgPerL',
+  'apartDays',
+  'stopFactor',
+  'lowFactor',
+  'veryEarlyFactor',
+  'oxygenMinutes',
+  'temperatureAndPhHours',
+  'alkalinityAndHardnessHours',
+  'copperHours',
+  'maxAgeMonths',
+  'maxErrorPercent',
+  'volumeLitres',
+  'amountGrams',
+  'amountMillilitres',
+  'amountShare',
+  'unwellPercent',
+] as const
+export type RuleParameterKey = (typeof ruleParameterKeys)[number]
 
 /** A threshold of a rule: a facility setting with a default. */
 export interface RuleParameter {
@@ -83,7 +169,7 @@ export interface CautionRule {
  */
 export function defineRule<const P extends Record<string, RuleParameter>>(
   rule: Omit<CautionRule, 'parameters' | 'judge' | 'condition'> & {
-    parameters: P
+    parameters: P & Record<Exclude<keyof P, RuleParameterKey>, never>
     judge(facts: CautionFacts, parameters: Record<keyof P, number>, stage: CautionStage): CautionFinding[]
     condition?(facts: CautionFacts, parameters: Record<keyof P, number>): Record<string, CautionParam>
   },

@@ -1,5 +1,4 @@
-import type { SourceKey, SourceMark } from '../sources.ts'
-import type { ResolveCode } from './caution-code.ts'
+import type { SourceMark } from '../sources.ts'
 import { type CautionFacts, type FactPath, factAt } from './caution-facts.ts'
 import type { CautionParam } from './caution-param.ts'
 import {
@@ -10,18 +9,19 @@ import {
   type CautionRuleId,
   type CautionSettings,
   type CautionStage,
+  type RuleSource,
   cautionLevels,
 } from './caution-rule.ts'
 import { cautionRules } from './caution-rules.ts'
+import { normaliseFacts } from './normalise-facts.ts'
 import { type ResolvedParameter, resolveParameters } from './resolve-parameters.ts'
 
-/** A fired rule. */
-export type Caution = {
+interface CautionFrame {
   ruleId: CautionRuleId
   /** The stage at which it was judged. */
   stage: CautionStage
   overridable: boolean
-  sources: readonly { source: SourceKey; mark: SourceMark }[]
+  sources: readonly RuleSource[]
   /** The weakest mark among its sources. */
   mark: SourceMark
   /** Facts that were not known and made it fire. */
@@ -29,7 +29,14 @@ export type Caution = {
   effects: readonly CautionEffect[]
   /** The thresholds it was judged by. */
   settings: readonly ResolvedParameter[]
-} & Omit<CautionFinding, 'unknown' | 'effects'> & { resolvedBy: readonly ResolveCode[] }
+}
+
+type Framed<Finding> = Finding extends CautionFinding
+  ? Omit<Finding, 'unknown' | 'effects'> & CautionFrame
+  : never
+
+/** A fired rule: what it found, by which rule and thresholds, on whose authority, and what would resolve it. */
+export type Caution = Framed<CautionFinding>
 
 /** A start rule on an order: what has to be true before the first gram, and becomes a step of the bath sheet. */
 export interface CautionCondition {
@@ -41,7 +48,7 @@ export interface CautionCondition {
   /** How it stands by the facts at hand; for information, it is judged at the dose. */
   state: 'met' | 'unmet' | 'unknown'
   effects: readonly CautionEffect[]
-  sources: readonly { source: SourceKey; mark: SourceMark }[]
+  sources: readonly RuleSource[]
   mark: SourceMark
   settings: readonly ResolvedParameter[]
 }
@@ -75,7 +82,9 @@ export interface CautionQuestion {
  * @param question facts at the instant judged, the stage and the facility's confirmed parameters
  */
 export function evaluateCautions(question: CautionQuestion): CautionAnswer {
-  const { facts, stage, settings = {}, factsAtSigning } = question
+  const { stage, settings = {} } = question
+  const facts = normaliseFacts(question.facts)
+  const factsAtSigning = question.factsAtSigning && normaliseFacts(question.factsAtSigning)
   const cautions: Caution[] = []
   const conditions: CautionCondition[] = []
   for (const rule of cautionRules) {
@@ -89,8 +98,7 @@ export function evaluateCautions(question: CautionQuestion): CautionAnswer {
     if (stage === 'start' && rule.when === 'design' && !hasChanged(rule, facts, factsAtSigning)) continue
     for (const finding of rule.judge(facts, parameters, stage)) {
       const { unknown = [], effects = [], ...told } = finding
-      cautions.push({
-        ...told,
+      const frame: CautionFrame = {
         ruleId: rule.id,
         stage,
         overridable: rule.overridable,
@@ -99,7 +107,8 @@ export function evaluateCautions(question: CautionQuestion): CautionAnswer {
         unknownFacts: unknown,
         effects,
         settings: resolved,
-      })
+      }
+      cautions.push({ ...told, ...frame } as Caution)
     }
   }
   const rank = ({ level }: Caution) => cautionLevels.indexOf(level)

@@ -8,13 +8,20 @@ import type { Instant } from '../time/instant.ts'
  * stated on the form. `at` is when it was true; null where that has no meaning.
  */
 export type Fact<T> =
-  | { state: 'known'; value: T; at: Instant | null; source: string }
+  | {
+      state: 'known'
+      value: T
+      at: Instant | null
+      source: string
+      /** Of a reading: the digits as the instrument showed them, in the unit of the fact; 7.0 is not 7. */
+      digits?: string
+    }
   | { state: 'unknown' }
   | { state: 'not-applicable' }
 
 /** A fact that is known. */
-export function known<T>(value: T, at: Instant | null = null, source = ''): Fact<T> {
-  return { state: 'known', value, at, source }
+export function known<T>(value: T, at: Instant | null = null, source = '', digits?: string): Fact<T> {
+  return { state: 'known', value, at, source, ...(digits === undefined ? {} : { digits }) }
 }
 
 /** A fact that nobody recorded. */

@@ -4,8 +4,8 @@ import type { Fact } from './fact.ts'
 
 /** A reading as a rule may use it: `old` keeps the value for the sentence, but nothing may be decided by it. */
 export type FreshReading =
-  | { state: 'fresh'; value: number; at: Instant }
-  | { state: 'old'; value: number; at: Instant; ageMinutes: number }
+  | { state: 'fresh'; value: number; digits: string | undefined; at: Instant }
+  | { state: 'old'; value: number; digits: string | undefined; at: Instant; ageMinutes: number }
   | { state: 'unknown' }
 
 /**
@@ -17,7 +17,8 @@ export type FreshReading =
 export function freshReading(fact: Fact<number>, at: Instant, maxAgeMinutes: number): FreshReading {
   if (fact.state !== 'known' || fact.at === null || !Number.isFinite(fact.value)) return { state: 'unknown' }
   const ageMinutes = minutesBetween(fact.at, at)
+  const { value, digits, at: readAt } = fact
   return ageMinutes > maxAgeMinutes
-    ? { state: 'old', value: fact.value, at: fact.at, ageMinutes: Math.floor(ageMinutes) }
-    : { state: 'fresh', value: fact.value, at: fact.at }
+    ? { state: 'old', value, digits, at: readAt, ageMinutes: Math.floor(ageMinutes) }
+    : { state: 'fresh', value, digits, at: readAt }
 }

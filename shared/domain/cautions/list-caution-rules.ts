@@ -1,4 +1,10 @@
-import type { CautionLevel, CautionRuleId, CautionSettings, CautionStage, RuleSource } from './caution-rule.ts'
+import type {
+  CautionLevel,
+  CautionRuleId,
+  CautionSettings,
+  CautionStage,
+  RuleSource,
+} from './caution-rule.ts'
 import { cautionRules } from './caution-rules.ts'
 import { type ResolvedParameter, resolveParameters } from './resolve-parameters.ts'
 

@@ -9,5 +9,7 @@ import { type Caution, evaluateCautions } from './evaluate-cautions.ts'
  * @param facts of the instant at which the dose was given, not of its entry
  */
 export function listExceptions(facts: CautionFacts, settings: CautionSettings = {}): Caution[] {
-  return evaluateCautions({ facts, stage: 'start', settings }).cautions.filter(({ level }) => level !== 'note')
+  return evaluateCautions({ facts, stage: 'start', settings }).cautions.filter(
+    ({ level }) => level !== 'note',
+  )
 }

@@ -4,7 +4,10 @@ import type { Fact } from './fact.ts'
 import { valueOf } from './fact.ts'
 import type { ReadingName } from './reading-name.ts'
 
-const byAgent: Record<AgentCode, { always: readonly ReadingName[]; fresh?: readonly ReadingName[]; marine?: readonly ReadingName[] }> = {
+const byAgent: Record<
+  AgentCode,
+  { always: readonly ReadingName[]; fresh?: readonly ReadingName[]; marine?: readonly ReadingName[] }
+> = {
   formalin: { always: ['oxygen', 'temperature'] },
   'copper-sulfate': { always: ['pH'], fresh: ['alkalinity'], marine: ['free-copper'] },
   'chelated-copper': { always: ['pH', 'total-copper'] },

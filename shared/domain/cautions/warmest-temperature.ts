@@ -1,11 +1,14 @@
 import { hoursBetween } from '../time/instant-arithmetic.ts'
 import type { CautionFacts } from './caution-facts.ts'
 
+/** Without a reading of the last hours the temperature is not known, however wide the window is set. */
+const freshHours = 4
+
 /**
- * The highest temperature of the last hours, °C, or null when none was read in them. At a boundary of a label the
+ * The highest temperature of the last hours, °C, or null when none was read within four. At a boundary of a label the
  * warmest water counts, not the newest reading: it may have been warmer while nobody looked.
  *
- * @param windowHours true hours before the instant judged, inclusive
+ * @param windowHours true hours before the instant judged, inclusive; the newest reading counts always
  * @source project-default: 4 h
  */
 export function warmestTemperatureC(facts: CautionFacts, windowHours: number): number | null {
@@ -13,9 +16,11 @@ export function warmestTemperatureC(facts: CautionFacts, windowHours: number): n
   const readings = recentTemperaturesC.state === 'known' ? [...recentTemperaturesC.value] : []
   if (temperatureC.state === 'known' && temperatureC.at !== null)
     readings.push({ value: temperatureC.value, at: temperatureC.at })
-  const inside = readings.filter(({ at, value }) => {
-    const age = hoursBetween(at, facts.at)
-    return Number.isFinite(value) && age >= 0 && age <= windowHours
-  })
-  return inside.length === 0 ? null : Math.max(...inside.map(({ value }) => value))
+  const aged = readings
+    .map(({ value, at }) => ({ value, hours: hoursBetween(at, facts.at) }))
+    .filter(({ value, hours }) => Number.isFinite(value) && hours >= 0)
+  const newestHours = Math.min(...aged.map(({ hours }) => hours))
+  if (newestHours > freshHours) return null
+  const counted = aged.filter(({ hours }) => hours <= windowHours || hours === newestHours)
+  return Math.max(...counted.map(({ value }) => value))
 }

@@ -32,7 +32,7 @@ export const formalinOxygen = defineRule({
           unknown: ['water.oxygenMgPerL'],
         },
       ]
-    const reading = readingOf(oxygen.value, 'mg/L')
+    const reading = readingOf(oxygen.value, 'mg/L', oxygen.digits)
     if (oxygen.state === 'old')
       return [
         {
@@ -49,7 +49,9 @@ export const formalinOxygen = defineRule({
         },
       ]
     if (!isBelow(oxygen.value, oxygenFloorMgPerL)) return []
-    return [{ code: 'oxygen-low', level: 'stop', params: { oxygen: reading, floor }, resolvedBy: ['raise-oxygen'] }]
+    return [
+      { code: 'oxygen-low', level: 'stop', params: { oxygen: reading, floor }, resolvedBy: ['raise-oxygen'] },
+    ]
   },
   condition: (_, { oxygenFloorMgPerL, oxygenMaxAgeMinutes }) => ({
     floor: readingOf(oxygenFloorMgPerL, 'mg/L'),

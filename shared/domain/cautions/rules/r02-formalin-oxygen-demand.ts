@@ -36,7 +36,8 @@ export const formalinOxygenDemand = defineRule({
     const floor = readingOf(parameters.oxygenFloorMgPerL, 'mg/L')
     const takesMgPerL = strength.productMgPerL / parameters.productMgPerMgOxygen
     const takes = readingOf(takesMgPerL, 'mg/L')
-    const isSafe = valueOf(facts.lifeSupport.aeration) === 'on' && valueOf(facts.water.oxygenIsLogged) === true
+    const isSafe =
+      valueOf(facts.lifeSupport.aeration) === 'on' && valueOf(facts.water.oxygenIsLogged) === true
     const level: CautionLevel = isSafe ? 'warning' : 'stop'
     const maxAge = stage === 'start' ? parameters.startMaxAgeMinutes : parameters.designMaxAgeHours * 60
     const now = freshReading(facts.water.oxygenMgPerL, facts.at, maxAge)
@@ -57,8 +58,10 @@ export const formalinOxygenDemand = defineRule({
       {
         code: 'oxygen-would-fall',
         level,
-        params: { oxygen: readingOf(now.value, 'mg/L'), takes, predicted, floor },
-        resolvedBy: isSafe ? ['lower-target', 'raise-oxygen'] : ['aerate-and-log', 'lower-target', 'raise-oxygen'],
+        params: { oxygen: readingOf(now.value, 'mg/L', now.digits), takes, predicted, floor },
+        resolvedBy: isSafe
+          ? ['lower-target', 'raise-oxygen']
+          : ['aerate-and-log', 'lower-target', 'raise-oxygen'],
       },
     ]
   },

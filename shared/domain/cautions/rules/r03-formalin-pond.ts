@@ -15,7 +15,13 @@ export const formalinPond = defineRule({
     warmestC: { default: 27, unit: 'degC', source: 'cfr-529-1030', mark: 'V', tighter: 'lower' },
     windowHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'higher' },
   },
-  uses: ['order.setting', 'water.temperatureC', 'water.recentTemperaturesC', 'water.hasBloom', 'animals.inWater'],
+  uses: [
+    'order.setting',
+    'water.temperatureC',
+    'water.recentTemperaturesC',
+    'water.hasBloom',
+    'animals.inWater',
+  ],
   sources: [{ source: 'cfr-529-1030', mark: 'V' }],
   concerns: ({ agent, order }) => agent === 'formalin' && valueOf(order.setting) === 'pond',
   judge(facts, { warmestC, windowHours }) {

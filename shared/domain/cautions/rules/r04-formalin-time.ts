@@ -33,14 +33,17 @@ export const formalinTime = defineRule({
   judge(facts, parameters) {
     const inWater = valueOf(facts.animals.inWater)
     const minutes = contactMinutes(facts)
-    if (inWater === null) return judgeLimit(minutes, parameters.eggMinutes, 'inhabitants-unknown')
+    const perDay = valueOf(facts.order.contactMinutesPerDay) ?? minutes
+    if (inWater === null) {
+      // The strictest row for one treatment, and the only row there is for a whole day.
+      const once = judgeLimit(minutes, parameters.eggMinutes, 'inhabitants-unknown')
+      return once.length > 0 ? once : judgeLimit(perDay, parameters.penaeidMinutesPerDay, 'penaeid-tank')
+    }
     const found: CautionFinding[] = []
     const finfish = inWater.filter(isFinfish)
     if (finfish.some(isEgg)) found.push(...judgeLimit(minutes, parameters.eggMinutes, 'egg'))
-    if (inWater.some(({ taxonGroup }) => taxonGroup === 'penaeid-shrimp')) {
-      const perDay = valueOf(facts.order.contactMinutesPerDay) ?? minutes
+    if (inWater.some(({ taxonGroup }) => taxonGroup === 'penaeid-shrimp'))
       found.push(...judgeLimit(perDay, parameters.penaeidMinutesPerDay, 'penaeid-tank'))
-    }
     if (finfish.some((animal) => !isEgg(animal))) found.push(...judgeFinfish(facts, minutes, parameters))
     return found
   },

@@ -110,7 +110,12 @@ function ceilingOf(
   ]
 }
 
-function told({ ulPerL, row }: Ceiling, targetUlPerL: number, warmestC: number | null, boundaryC: number): CautionFinding {
+function told(
+  { ulPerL, row }: Ceiling,
+  targetUlPerL: number,
+  warmestC: number | null,
+  boundaryC: number,
+): CautionFinding {
   const target = doseOf(targetUlPerL, 'uL/L')
   const ceiling = doseOf(ulPerL, 'uL/L')
   const boundary = readingOf(boundaryC, 'degC')
@@ -129,5 +134,10 @@ function told({ ulPerL, row }: Ceiling, targetUlPerL: number, warmestC: number |
       params: { target, ceiling, temperature: readingOf(warmestC ?? boundaryC, 'degC'), boundary },
       resolvedBy: ['lower-target'],
     }
-  return { code: 'formalin-over-ceiling', level: 'stop', params: { target, ceiling, row }, resolvedBy: ['lower-target'] }
+  return {
+    code: 'formalin-over-ceiling',
+    level: 'stop',
+    params: { target, ceiling, row },
+    resolvedBy: ['lower-target'],
+  }
 }

@@ -17,7 +17,13 @@ export const formalinWarmWater = defineRule({
     capProductMgPerL: { default: 150, unit: 'mg/L', source: 'ufifas-vm77', mark: 'V', tighter: 'lower' },
     windowHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'higher' },
   },
-  uses: ['order.target', 'water.temperatureC', 'water.recentTemperaturesC', 'animals.inWater', 'lot.densityGPerMl'],
+  uses: [
+    'order.target',
+    'water.temperatureC',
+    'water.recentTemperaturesC',
+    'animals.inWater',
+    'lot.densityGPerMl',
+  ],
   sources: [{ source: 'ufifas-vm77', mark: 'V' }],
   concerns: ({ agent }) => agent === 'formalin',
   judge(facts, { boundaryC, capProductMgPerL, windowHours }) {

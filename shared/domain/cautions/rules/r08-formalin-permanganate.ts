@@ -39,7 +39,13 @@ export const formalinPermanganate = defineRule({
         const base = { level: 'stop', resolvedBy: ['wait-between-agents', 'choose-other-agent'] } as const
         const { orderNumber } = use
         return hours <= 0
-          ? [{ ...base, code: 'formalin-and-permanganate-together', params: { orderNumber, limitHours: apartHours } }]
+          ? [
+              {
+                ...base,
+                code: 'formalin-and-permanganate-together',
+                params: { orderNumber, limitHours: apartHours },
+              },
+            ]
           : [
               {
                 ...base,
@@ -56,6 +62,7 @@ function hoursApart(use: AgentUse, facts: CautionFacts, stage: 'design' | 'start
   const startsAt = stage === 'start' ? facts.at : (valueOf(facts.order.startsAt) ?? facts.at)
   const endsAt = valueOf(facts.order.endsAt)
   if (use.until !== null && hoursBetween(use.until, startsAt) > 0) return hoursBetween(use.until, startsAt)
-  if (use.from !== null && endsAt !== null && hoursBetween(endsAt, use.from) > 0) return hoursBetween(endsAt, use.from)
+  if (use.from !== null && endsAt !== null && hoursBetween(endsAt, use.from) > 0)
+    return hoursBetween(endsAt, use.from)
   return 0
 }

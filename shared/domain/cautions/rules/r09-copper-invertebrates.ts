@@ -25,7 +25,10 @@ export const copperInvertebrates = defineRule({
         },
       ]
     const found: CautionFinding[] = []
-    const base = { level: 'stop', resolvedBy: ['move-animals', 'part-the-water', 'choose-other-agent'] } as const
+    const base = {
+      level: 'stop',
+      resolvedBy: ['move-animals', 'part-the-water', 'choose-other-agent'],
+    } as const
     const invertebrates = inWater.filter(isInvertebrate)
     const elasmobranchs = inWater.filter(({ taxonGroup }) => taxonGroup === 'elasmobranch')
     if (invertebrates.length > 0)

@@ -11,7 +11,13 @@ export const copperAlkalinity = defineRule({
   when: 'both',
   overridable: true,
   parameters: {
-    floorMgPerLCaCO3: { default: 50, unit: 'mg/L_CaCO3', source: 'ufifas-fa008', mark: 'V', tighter: 'higher' },
+    floorMgPerLCaCO3: {
+      default: 50,
+      unit: 'mg/L_CaCO3',
+      source: 'ufifas-fa008',
+      mark: 'V',
+      tighter: 'higher',
+    },
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.kind', 'water.alkalinityMgPerLCaCO3'],
@@ -23,9 +29,14 @@ export const copperAlkalinity = defineRule({
   judge(facts, { floorMgPerLCaCO3, maxAgeHours }) {
     const floor = readingOf(floorMgPerLCaCO3, 'mg/L_CaCO3')
     const reading = freshReading(facts.water.alkalinityMgPerLCaCO3, facts.at, maxAgeHours * 60)
-    const base = { level: 'stop', resolvedBy: ['read-alkalinity'], unknown: ['water.alkalinityMgPerLCaCO3'] } as const
-    if (reading.state === 'unknown') return [{ ...base, code: 'alkalinity-unknown', params: { floor, maxAgeHours } }]
-    const alkalinity = readingOf(reading.value, 'mg/L_CaCO3')
+    const base = {
+      level: 'stop',
+      resolvedBy: ['read-alkalinity'],
+      unknown: ['water.alkalinityMgPerLCaCO3'],
+    } as const
+    if (reading.state === 'unknown')
+      return [{ ...base, code: 'alkalinity-unknown', params: { floor, maxAgeHours } }]
+    const alkalinity = readingOf(reading.value, 'mg/L_CaCO3', reading.digits)
     if (reading.state === 'old')
       return [{ ...base, code: 'alkalinity-old', params: { alkalinity, readAt: reading.at, maxAgeHours } }]
     if (!isBelow(reading.value, floorMgPerLCaCO3)) return []

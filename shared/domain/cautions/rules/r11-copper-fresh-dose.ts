@@ -31,9 +31,13 @@ export const copperFreshDose = defineRule({
     if (reading.state !== 'fresh') return []
     const limitMgPerL = reading.value / alkalinityDivisor
     if (!exceeds(strength.pentahydrateMgPerL, limitMgPerL)) return []
-    const alkalinity = readingOf(reading.value, 'mg/L_CaCO3')
+    const alkalinity = readingOf(reading.value, 'mg/L_CaCO3', reading.digits)
     return [
-      { ...base, code: 'copper-over-alkalinity', params: { target, limit: doseOf(limitMgPerL, 'mg/L'), alkalinity } },
+      {
+        ...base,
+        code: 'copper-over-alkalinity',
+        params: { target, limit: doseOf(limitMgPerL, 'mg/L'), alkalinity },
+      },
     ]
   },
 })

@@ -39,19 +39,20 @@ export const copperMarineLevel = defineRule({
       })
     const course = valueOf(facts.order.copperCourse)
     const level = freshReading(facts.water.freeCopperMgPerL, facts.at, maxAgeHours * 60)
-    if (level.state !== 'fresh') {
-      // Before the first dose is planned there is nothing to have read; from its start on there is.
-      if (stage === 'start' || course === 'ramp' || course === 'hold')
-        found.push({
-          code: 'copper-reading-missing',
-          level: 'stop',
-          params: { maxAgeHours },
-          resolvedBy: ['read-copper'],
-          unknown: ['water.freeCopperMgPerL'],
-        })
+    const isUnderWay = stage === 'start' || course === 'ramp' || course === 'hold'
+    if (level.state !== 'fresh' && isUnderWay) {
+      found.push({
+        code: 'copper-reading-missing',
+        level: 'stop',
+        params: { maxAgeHours },
+        resolvedBy: ['read-copper'],
+        unknown: ['water.freeCopperMgPerL'],
+      })
       return found
     }
-    const reading = readingOf(level.value, 'mg/L')
+    // Before the first dose is planned nobody has to have read copper; an old reading still tells what is in the water.
+    if (level.state === 'unknown') return found
+    const reading = readingOf(level.value, 'mg/L', level.digits)
     if (exceeds(level.value, stopMgPerL))
       found.push({
         code: 'copper-very-high',

@@ -33,7 +33,12 @@ export const chloroquine = defineRule({
       })
     const algae = water.hasPlantsOrAlgae
     if (algae.state === 'known' && algae.value)
-      found.push({ code: 'chloroquine-algae', level: 'warning', params: {}, resolvedBy: ['choose-other-water'] })
+      found.push({
+        code: 'chloroquine-algae',
+        level: 'warning',
+        params: {},
+        resolvedBy: ['choose-other-water'],
+      })
     if (algae.state === 'unknown')
       found.push({
         code: 'chloroquine-algae-unknown',

@@ -11,7 +11,13 @@ export const chloramineWater = defineRule({
   overridable: true,
   parameters: {
     lowestPh: { default: 6.5, unit: 'pH', source: 'treatment-practice', mark: 'M', tighter: 'higher' },
-    floorMgPerLCaCO3: { default: 50, unit: 'mg/L_CaCO3', source: 'treatment-practice', mark: 'M', tighter: 'higher' },
+    floorMgPerLCaCO3: {
+      default: 50,
+      unit: 'mg/L_CaCO3',
+      source: 'treatment-practice',
+      mark: 'M',
+      tighter: 'higher',
+    },
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.pH', 'water.alkalinityMgPerLCaCO3'],
@@ -33,7 +39,7 @@ export const chloramineWater = defineRule({
       found.push({
         code: 'chloramine-acid',
         level: 'warning',
-        params: { reading: readingOf(pH.value, 'pH'), limit: readingOf(lowestPh, 'pH') },
+        params: { reading: readingOf(pH.value, 'pH', pH.digits), limit: readingOf(lowestPh, 'pH') },
         resolvedBy: ['correct-water', 'lower-target'],
       })
     if (alkalinity.state !== 'fresh')
@@ -49,7 +55,7 @@ export const chloramineWater = defineRule({
         code: 'chloramine-soft',
         level: 'warning',
         params: {
-          reading: readingOf(alkalinity.value, 'mg/L_CaCO3'),
+          reading: readingOf(alkalinity.value, 'mg/L_CaCO3', alkalinity.digits),
           limit: readingOf(floorMgPerLCaCO3, 'mg/L_CaCO3'),
         },
         resolvedBy: ['correct-water', 'lower-target'],

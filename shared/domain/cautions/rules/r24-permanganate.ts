@@ -15,7 +15,13 @@ export const permanganate = defineRule({
   overridable: true,
   parameters: {
     highestPh: { default: 8.5, unit: 'pH', source: 'treatment-practice', mark: 'M', tighter: 'lower' },
-    hardMgPerLCaCO3: { default: 250, unit: 'mg/L_CaCO3', source: 'project-default', mark: 'P', tighter: 'lower' },
+    hardMgPerLCaCO3: {
+      default: 250,
+      unit: 'mg/L_CaCO3',
+      source: 'project-default',
+      mark: 'P',
+      tighter: 'lower',
+    },
     totalMgPerL: { default: 6, unit: 'mg/L', source: 'ufifas-fa37', mark: 'V2', tighter: 'lower' },
     apartDays: { default: 7, unit: 'd', source: 'treatment-practice', mark: 'M', tighter: 'higher' },
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
@@ -50,7 +56,10 @@ export const permanganate = defineRule({
       found.push({
         code: 'permanganate-alkaline',
         level: 'warning',
-        params: { reading: readingOf(pH.value, 'pH'), limit: readingOf(parameters.highestPh, 'pH') },
+        params: {
+          reading: readingOf(pH.value, 'pH', pH.digits),
+          limit: readingOf(parameters.highestPh, 'pH'),
+        },
         resolvedBy: ['choose-other-agent', 'correct-water'],
       })
     if (hardness.state !== 'fresh')
@@ -66,12 +75,16 @@ export const permanganate = defineRule({
         code: 'permanganate-hard',
         level: 'warning',
         params: {
-          reading: readingOf(hardness.value, 'mg/L_CaCO3'),
+          reading: readingOf(hardness.value, 'mg/L_CaCO3', hardness.digits),
           limit: readingOf(parameters.hardMgPerLCaCO3, 'mg/L_CaCO3'),
         },
         resolvedBy: ['choose-other-agent', 'correct-water'],
       })
-    return [...found, ...judgeTotal(facts, parameters.totalMgPerL), ...judgeRepeat(facts, parameters.apartDays)]
+    return [
+      ...found,
+      ...judgeTotal(facts, parameters.totalMgPerL),
+      ...judgeRepeat(facts, parameters.apartDays),
+    ]
   },
 })
 

@@ -25,7 +25,7 @@ export const defaultRange = defineRule({
     // No figure yet, or one without a basis, is R27's matter.
     if (!target || target.basis === null) return []
     const range = valueOf(facts.order.defaultRange)
-    if (!range)
+    if (!range || !(range.high > 0))
       return [
         {
           code: 'no-default-range',
@@ -66,7 +66,7 @@ export const defaultRange = defineRule({
           resolvedBy: ['check-figure', 'lower-target'],
         },
       ]
-    if (range.low === null || !isBelow(value, range.low * lowFactor)) return []
+    if (range.low === null || !(range.low > 0) || !isBelow(value, range.low * lowFactor)) return []
     return [
       {
         code: 'under-default',

@@ -13,7 +13,13 @@ export const doseSpacing = defineRule({
   when: 'both',
   overridable: true,
   parameters: {
-    veryEarlyFactor: { default: 0.5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'higher' },
+    veryEarlyFactor: {
+      default: 0.5,
+      unit: 'factor',
+      source: 'project-default',
+      mark: 'P',
+      tighter: 'higher',
+    },
   },
   uses: ['order.spacing', 'order.startsAt'],
   sources: [
@@ -36,7 +42,7 @@ export const doseSpacing = defineRule({
     const doseAt = stage === 'start' ? facts.at : valueOf(facts.order.startsAt)
     if (lastGivenAt === null || doseAt === null || !(intervalHours > 0)) return found
     const { earlyHours, lateHours } = doseWindow(intervalHours)
-    const hours = hoursBetween(lastGivenAt, doseAt)
+    const hours = Math.max(0, hoursBetween(lastGivenAt, doseAt))
     const earliestHours = intervalHours - earlyHours
     const latestHours = intervalHours + lateHours
     if (hours < intervalHours * veryEarlyFactor)
@@ -54,7 +60,12 @@ export const doseSpacing = defineRule({
         resolvedBy: ['wait-for-window'],
       })
     else if (hours > latestHours)
-      found.push({ code: 'dose-late', level: 'warning', params: { hours, latestHours }, resolvedBy: ['amend-order'] })
+      found.push({
+        code: 'dose-late',
+        level: 'warning',
+        params: { hours, latestHours },
+        resolvedBy: ['amend-order'],
+      })
     return found
   },
 })

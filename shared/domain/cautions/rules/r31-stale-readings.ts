@@ -13,7 +13,13 @@ export const staleReadings = defineRule({
   parameters: {
     oxygenMinutes: { default: 30, unit: 'min', source: 'project-default', mark: 'P', tighter: 'lower' },
     temperatureAndPhHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
-    alkalinityAndHardnessHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
+    alkalinityAndHardnessHours: {
+      default: 24,
+      unit: 'h',
+      source: 'project-default',
+      mark: 'P',
+      tighter: 'lower',
+    },
     copperHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: [
@@ -40,8 +46,10 @@ export const staleReadings = defineRule({
     })
   },
   condition: (facts, parameters) => ({
-    readings: requiredReadings(facts),
-    ages: requiredReadings(facts).map((name) => String(maxAge(name, parameters))),
+    tests: requiredReadings(facts).map((reading) => ({
+      reading,
+      maxAgeMinutes: maxAge(reading, parameters),
+    })),
   }),
 })
 

@@ -45,9 +45,17 @@ export const volume = defineRule({
     if (facilityDateOf(facts.at, facts.zone) > addMonths(determinedOn, maxAgeMonths))
       found.push({ ...base, code: 'volume-old', params: { determinedOn, limitMonths: maxAgeMonths } })
     if (method === 'estimated' && errorPercent === null)
-      found.push({ ...base, code: 'volume-estimated-error-unknown', params: { limitPercent: maxErrorPercent } })
+      found.push({
+        ...base,
+        code: 'volume-estimated-error-unknown',
+        params: { limitPercent: maxErrorPercent },
+      })
     if (method === 'estimated' && errorPercent !== null && exceeds(errorPercent, maxErrorPercent))
-      found.push({ ...base, code: 'volume-estimated', params: { errorPercent, limitPercent: maxErrorPercent } })
+      found.push({
+        ...base,
+        code: 'volume-estimated',
+        params: { errorPercent, limitPercent: maxErrorPercent },
+      })
     return found
   },
 })

@@ -1,0 +1,27 @@
+import { type CautionFacts, type FactPath, factAt, factGroups } from './caution-facts.ts'
+import type { Fact } from './fact.ts'
+
+/**
+ * The facts, with every one that holds a figure which is no finite number set to unknown. A broken figure must not pass
+ * a comparison by being neither above nor below a limit.
+ */
+export function normaliseFacts(facts: CautionFacts): CautionFacts {
+  let sound = facts
+  for (const group of factGroups) {
+    const broken = Object.keys(facts[group]).filter((name) => {
+      const fact: Fact<unknown> = factAt(facts, `${group}.${name}` as FactPath)
+      return fact.state === 'known' && !isFinite(fact.value)
+    })
+    if (broken.length === 0) continue
+    const unknowns = Object.fromEntries(broken.map((name) => [name, { state: 'unknown' }]))
+    sound = { ...sound, [group]: { ...sound[group], ...unknowns } }
+  }
+  return sound
+}
+
+/** Whether no figure anywhere in a value is NaN or infinite. */
+function isFinite(value: unknown): boolean {
+  if (typeof value === 'number') return Number.isFinite(value)
+  if (typeof value !== 'object' || value === null) return true
+  return Object.values(value).every(isFinite)
+}
