@@ -1,8 +1,10 @@
 import type { DoseRefusal } from '../domain/dose/dose-refusal.ts'
 import type { Refusal } from '../domain/result.ts'
 import { isUnitCode } from '../domain/units/is-unit-code.ts'
+import type { ArithmeticRefusal } from '../domain/units/arithmetic-refusal.ts'
 import { unitOf } from '../domain/units/unit-of.ts'
 import type { VolumeRefusal } from '../domain/water/volume-refusal.ts'
+import { arithmeticRefusals } from './arithmetic-refusals.ts'
 import { doseRefusals } from './dose-refusals.ts'
 import { fieldExamples, numberFields } from './number-fields.ts'
 import { numberRefusals, type RefusalWords } from './number-refusals.ts'
@@ -10,12 +12,13 @@ import { unitNames } from './units.ts'
 import { volumeRefusals } from './volume-refusals.ts'
 
 /** Every refusal that the engines of units, water and dose give. */
-export type NumberRefusalCode = VolumeRefusal | DoseRefusal
+export type NumberRefusalCode = VolumeRefusal | DoseRefusal | ArithmeticRefusal
 
 const catalogue: Record<NumberRefusalCode, (p: RefusalWords) => string> = {
   ...numberRefusals,
   ...volumeRefusals,
   ...doseRefusals,
+  ...arithmeticRefusals,
 }
 
 /**
