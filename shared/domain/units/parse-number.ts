@@ -23,7 +23,11 @@ export function parseNumber(typed: unknown, field = 'value'): Result<ParsedNumbe
   if (typeof typed !== 'string') return refuse('not-a-number', field)
   const trimmed = typed.trim()
   if (trimmed === '') return refuse('blank', field)
-  if (trimmed.length > longest) return refuse('too-long', field, { most: longest })
+  // long text that is no number may still be arithmetic, which is for others to read
+  if (trimmed.length > longest)
+    return /^[-+−–\d.,\s]*$/.test(trimmed)
+      ? refuse('too-long', field, { most: longest })
+      : refuse('not-a-number', field)
   const plain = trimmed.replace(/^[−–]/, '-').replace(/^\+/, '')
   if (/^-?[\d.,]*$/.test(plain) && (plain.match(/[.,]/g) ?? []).length > 1)
     return refuse('two-separators', field)

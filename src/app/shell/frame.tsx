@@ -10,6 +10,7 @@ import { Banner } from '../../ui/banner.tsx'
 import { FindDialog } from '../../ui/find-dialog.tsx'
 import { HourRuler } from '../../ui/hour-ruler.tsx'
 import { KeyListDialog } from '../../ui/key-list-dialog.tsx'
+import { QuantityToolsContext } from '../../ui/quantity-context.ts'
 import { HoursAboveContext } from '../../ui/sheet.tsx'
 import { SingleKeysContext } from '../../ui/single-keys-context.ts'
 import { SkipLink } from '../../ui/skip-link.tsx'
@@ -18,6 +19,7 @@ import { sheets } from '../sheets.ts'
 import { WithMe } from '../with-me.tsx'
 import { Bridge } from './bridge.tsx'
 import { useDueToday } from './due-today.ts'
+import { useQuantityTools } from './use-quantity-tools.ts'
 
 /** The frame around every sheet. */
 export function Frame() {
@@ -35,6 +37,7 @@ function SignedInFrame() {
   const now = useFacilityNow(me.facility.zone)
   const due = useDueToday()
   const singleKeys = useSingleKeys()
+  const quantityTools = useQuantityTools(me.facility.gallon)
   const { pathname } = useLocation()
   const arrived = useRef(pathname)
 
@@ -67,7 +70,9 @@ function SignedInFrame() {
             {me.facility.demo ? <Banner icon={Anchor}>{frameWords.demo}</Banner> : null}
             {due === null ? null : <HourRuler items={due} now={now.time} nowMinute={now.minute} />}
           </div>
-          <Outlet />
+          <QuantityToolsContext value={quantityTools}>
+            <Outlet />
+          </QuantityToolsContext>
         </div>
         {front === 'find' ? (
           <FindDialog onBack={() => setFront(null)} unavailable={frameWords.notHereYetFind} />

@@ -1,8 +1,13 @@
 import fc from 'fast-check'
-import { describe, expect, it } from 'vitest'
+import { beforeAll, describe, expect, it } from 'vitest'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { workOutArithmetic } from '../../../src/lib/arithmetic.ts'
 import { quantityTools } from '../../../src/lib/quantity-tools.ts'
+
+// the module takes a second to load, and much longer on a busy machine
+beforeAll(async () => {
+  await import('mathjs')
+}, 60_000)
 
 async function worked(typed: string, unit: UnitCode, gallon?: 'us' | 'imperial'): Promise<string> {
   const answer = await workOutArithmetic(typed, unit, gallon ? { gallon } : {})

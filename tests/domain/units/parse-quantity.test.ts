@@ -50,6 +50,7 @@ describe('a typed number', () => {
     ['--2', 'not-a-number'],
     ['½', 'not-a-number'],
     ['9'.repeat(41), 'too-long'],
+    ['2.40 m * 1.20 m * 0.68 m + 1.10 m * 0.60 m * 0.40 m', 'not-a-number'],
   ])('%j is refused as %s', (typed, code) => {
     expect(parseNumber(typed, 'depth')).toMatchObject({ ok: false, refusal: { code, field: 'depth' } })
   })
