@@ -3,7 +3,6 @@ import { redirect } from 'react-router-dom'
 import type { LoaderFunctionArgs } from 'react-router-dom'
 import { meQuery } from '../lib/me.ts'
 import { paths } from '../lib/paths.ts'
-import { landed } from './landed-sheets.ts'
 
 /**
  * Before a screen is drawn: somebody must be signed in, and a one-time password must have been changed. Where the person
@@ -17,8 +16,6 @@ export function requireSignIn(client: QueryClient) {
     const choosing = url.pathname === paths.newPassword()
     if (me.mustChangePassword && !choosing) throw redirect(paths.newPassword())
     if (!me.mustChangePassword && choosing) throw redirect(paths.today())
-    if (url.pathname === paths.today() && !landed.has('today'))
-      throw redirect(paths.notInThisVersion('today'))
     return null
   }
 }
@@ -27,13 +24,13 @@ export function requireSignIn(client: QueryClient) {
 export function redirectSignedIn(client: QueryClient) {
   return async ({ request }: LoaderFunctionArgs) => {
     const me = await client.ensureQueryData(meQuery).catch(() => null)
-    if (me) throw redirect(wantedAddress(request.url))
+    if (me) throw redirect(wantedAddress(new URL(request.url).search))
     return null
   }
 }
 
 /** The address that sign-in was asked for on the way to; only inside this application. */
-export function wantedAddress(signInUrl: string): string {
-  const then = new URL(signInUrl, 'http://here').searchParams.get('then')
+export function wantedAddress(signInSearch: string): string {
+  const then = new URLSearchParams(signInSearch).get('then')
   return then?.startsWith('/') && !then.startsWith('//') && !then.startsWith('/\\') ? then : paths.today()
 }

@@ -1,9 +1,10 @@
 import type { QueryClient } from '@tanstack/react-query'
-import { createBrowserRouter } from 'react-router-dom'
+import { createBrowserRouter, redirect } from 'react-router-dom'
 import type { RouteObject } from 'react-router-dom'
+import { paths } from '../lib/paths.ts'
 import { RouteError } from './error-boundary.tsx'
+import { landed } from './landed-sheets.ts'
 import { redirectSignedIn, requireSignIn } from './require-sign-in.ts'
-import { Frame } from './shell/frame.tsx'
 
 /** The page of parts is for building with; it is in no production bundle. */
 const withParts = import.meta.env.DEV || import.meta.env.VITE_PARTS === '1'
@@ -17,6 +18,9 @@ const partsRoutes: RouteObject[] = withParts
  * feature is in this version, and is then named in landed-sheets.ts too.
  */
 const sheetRoutes: RouteObject[] = [
+  ...(landed.has('today')
+    ? []
+    : [{ index: true, loader: () => redirect(paths.notInThisVersion('today')) } satisfies RouteObject]),
   { path: 'not-in-this-version/:sheet', lazy: () => import('./routes/not-in-this-version.tsx') },
   { path: 'settings/own', lazy: () => import('./routes/own-settings.tsx') },
 ]
@@ -36,7 +40,7 @@ export function createRoutes(client: QueryClient): RouteObject[] {
         },
         ...partsRoutes,
         {
-          Component: Frame,
+          lazy: () => import('./shell/frame.tsx'),
           loader: requireSignIn(client),
           children: [
             {

@@ -25,7 +25,8 @@ export function useSetPreference() {
       return { before }
     },
     onError: (_error, _choice, context) => {
-      if (context?.before) client.setQueryData(meKey, context.before)
+      // the session may have ended with this very call; then there is nobody to put the choice back for
+      if (context?.before && client.getQueryData(meKey)) client.setQueryData(meKey, context.before)
     },
     onSuccess: (me) => client.setQueryData(meKey, me),
   })

@@ -74,7 +74,10 @@ export function OverlayParts() {
       ) : null}
       {open === 'drawer' ? (
         <Drawer label={words.log} onBack={() => setOpen(null)}>
-          {log}
+          <div className="pane stack">
+            <p className="t-head">{words.log}</p>
+            <Button onClick={() => setOpen(null)}>{words.keepRunning}</Button>
+          </div>
         </Drawer>
       ) : null}
     </PartGroup>

@@ -124,6 +124,13 @@ describe('the frame', () => {
       expect(await page.getByText(`${name} is not in this version`).isVisible()).toBe(missing)
     }
     await expectAccessible(page, 'a sheet')
+    // the mark leads home from wherever one is
+    await page.getByRole('link', { name: 'Pratique, to Today' }).click()
+    await page.waitForFunction(() => document.title.startsWith('Today'))
+    expect(await page.getByText('Nothing at this address').count()).toBe(0)
+    await page.goto(`${app.url}/no/such/sheet`)
+    await page.getByRole('heading', { name: 'Nothing at this address' }).waitFor()
+    await expectAccessible(page, 'nothing at this address')
   })
 
   it('opens finding and the list of keys, follows the chosen light, and signs out', async () => {

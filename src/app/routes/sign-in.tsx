@@ -1,7 +1,7 @@
 import { useRef, useState } from 'react'
 import type { FormEvent } from 'react'
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { useNavigate } from 'react-router-dom'
+import { useLocation, useNavigate } from 'react-router-dom'
 import { signInAddresses } from '../../../shared/contracts/sign-in.addresses.ts'
 import type { signIn } from '../../../shared/contracts/sign-in.contract.ts'
 import { frameWords } from '../../../shared/messages/frame.ts'
@@ -35,6 +35,7 @@ export function Component() {
   useSheetTitle(signInWords.title)
   const client = useQueryClient()
   const navigate = useNavigate()
+  const { search } = useLocation()
   const [faults, setFaults] = useState<Faults>({})
   const email = useRef<HTMLInputElement>(null)
   const password = useRef<HTMLInputElement>(null)
@@ -44,7 +45,7 @@ export function Component() {
     onSuccess: async (me) => {
       changePerson(client, me)
       themeFor(me.id, me.preferences.theme)
-      await navigate(me.mustChangePassword ? paths.newPassword() : wantedAddress(window.location.href), {
+      await navigate(me.mustChangePassword ? paths.newPassword() : wantedAddress(search), {
         replace: true,
       })
     },

@@ -22,7 +22,7 @@ import { useDueToday } from './due-today.ts'
 import { useQuantityTools } from './use-quantity-tools.ts'
 
 /** The frame around every sheet. */
-export function Frame() {
+export function Component() {
   return (
     <WithMe>
       <SignedInFrame />

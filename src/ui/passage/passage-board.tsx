@@ -106,7 +106,7 @@ export function PassageBoard({ passages, from, until, today, density }: PassageB
         </svg>
         <div className="passage-fixes">
           {rows.map(({ view, course }) => (
-            <PassageFixes key={view.id} view={view} marks={course.marks} />
+            <PassageFixes key={view.id} view={view} marks={course.marks} width={width} />
           ))}
         </div>
       </div>

@@ -73,7 +73,7 @@ export function PassageCase({
         <DayRuler scale={scale} today={view.today} y={water} />
       </svg>
       <div className="passage-fixes">
-        <PassageFixes view={view} marks={course.marks} onOpenFix={onOpenFix} />
+        <PassageFixes view={view} marks={course.marks} width={width} onOpenFix={onOpenFix} />
       </div>
     </div>
   )

@@ -16,10 +16,13 @@ const target = 24
 export function PassageFixes({
   view,
   marks,
+  width,
   onOpenFix,
 }: {
   view: PassageView
   marks: readonly CourseMark[]
+  /** Width of the drawing. */
+  width: number
   onOpenFix?: ((fixIds: string[]) => void) | undefined
 }) {
   const nodes = useRef<(HTMLElement | null)[]>([])
@@ -80,7 +83,7 @@ export function PassageFixes({
         })}
       </ul>
       {shown ? (
-        <p className="passage-tip" aria-hidden="true" style={tipPlace(shown)}>
+        <p className="passage-tip" aria-hidden="true" style={tipPlace(shown, width)}>
           {markWords(shown, view)}
         </p>
       ) : null}
@@ -102,8 +105,10 @@ function reach(marks: readonly CourseMark[], i: number): { left: number; right: 
   return { left: gap(-1), right: gap(1) }
 }
 
-function tipPlace(mark: CourseMark) {
-  return mark.x > 320
-    ? { left: mark.x - 266, top: mark.y + 16 }
-    : { left: Math.max(2, mark.x - 6), top: mark.y + 16 }
+/** Under the mark, and on the side where there is more room. */
+function tipPlace(mark: CourseMark, width: number) {
+  const top = mark.y + 16
+  return mark.x > width / 2
+    ? { right: Math.max(2, width - mark.x - 8), top }
+    : { left: Math.max(2, mark.x - 8), top }
 }
