@@ -103,7 +103,7 @@ it('asks for a password of one’s own after a one-time password, and lets nobod
   await page.getByLabel('New password again').fill('salt-and-tide-9')
   await page.getByRole('button', { name: 'Keep this password' }).click()
   await page.getByText('Your password is changed').waitFor()
-  expect(new URL(page.url()).pathname).not.toBe('/new-password')
+  await page.waitForURL((url) => url.pathname !== '/new-password')
 })
 
 describe('the frame', () => {
