@@ -3,6 +3,7 @@ import { compose } from '../composition.ts'
 import type { Clock } from '../platform/clock.ts'
 import { settableClock } from '../platform/clock.ts'
 import type { Log } from '../platform/log.ts'
+import { seedAnimals, seedTaxa } from './animals.ts'
 import { seedFormulary } from './formulary.ts'
 import { demoPassword, demoPeople, seedPeople } from './people.ts'
 import { seedWater } from './water.ts'
@@ -30,7 +31,9 @@ export async function seedDemo(outside: {
     const actors = await seedPeople(composition)
     await composition.formulary.service.loadDefaults()
     await seedFormulary(composition, actors, now)
-    await seedWater(composition, { clock, now, people: actors })
+    const { enclosureIds } = await seedWater(composition, { clock, now, people: actors })
+    const taxa = await seedTaxa(composition, actors)
+    await seedAnimals(composition, { clock, now, people: actors, enclosureIds, taxa })
     return true
   } finally {
     await runner.query('SELECT pg_advisory_unlock($1)', [seedLock])

@@ -238,8 +238,10 @@ export async function seedWater(composition: Composition, outside: DemoOutside):
     })
 
   clock.set(start)
+  const landId = parts.ids.next()
+  ids.enclosureIds.set(demoLand.code, landId)
   await enclosures.service.enterEnclosure(as('tech'), {
-    id: parts.ids.next(),
+    id: landId,
     ...demoLand,
     kind: 'land-area',
     boundary: null,
