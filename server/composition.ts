@@ -1,6 +1,7 @@
 import path from 'node:path'
 import type { DataSource } from 'typeorm'
 import { createAcquisitions } from './features/acquisitions/index.ts'
+import { createAdministrations } from './features/administrations/index.ts'
 import { createAnimals } from './features/animals/index.ts'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
@@ -9,6 +10,7 @@ import { createDocuments } from './features/documents/index.ts'
 import { createExports } from './features/exports/index.ts'
 import { createFacility } from './features/facility/index.ts'
 import { createFormulary } from './features/formulary/index.ts'
+import { createOrders } from './features/orders/index.ts'
 import { createPeople } from './features/people/index.ts'
 import { createPermits } from './features/permits/index.ts'
 import { createSigning } from './features/signing/index.ts'
@@ -67,6 +69,16 @@ export function compose(outside: Outside) {
   const permits = createPermits(register)
   const acquisitions = createAcquisitions({ ...register, permits: permits.service })
   const exports = createExports({ ...register, acquisitions })
+  const orders = createOrders({
+    ...parts,
+    facility: facility.service,
+    signing: signing.service,
+    formulary,
+    water,
+    animals,
+    documents,
+  })
+  const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
   return {
     parts,
     authenticator,
@@ -82,6 +94,8 @@ export function compose(outside: Outside) {
     permits,
     acquisitions,
     exports,
+    orders,
+    administrations,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -97,6 +111,8 @@ export function compose(outside: Outside) {
       ...permits.routes,
       ...acquisitions.routes,
       ...exports.routes,
+      ...orders.routes,
+      ...administrations.routes,
     ],
     /** Ends what runs beside the requests. */
     close: () => parts.pdf.close(),

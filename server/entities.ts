@@ -1,3 +1,5 @@
+import { administrationEntities } from './features/administrations/index.ts'
+import { orderEntities } from './features/orders/index.ts'
 import { acquisitionEntities } from './features/acquisitions/index.ts'
 import { animalEntities } from './features/animals/index.ts'
 import { enclosureEntities } from './features/enclosures/index.ts'
@@ -13,6 +15,8 @@ import { waterEntities } from './features/water/index.ts'
 
 /** Every mapped table; each feature names its own. */
 export const entities = [
+  ...orderEntities,
+  ...administrationEntities,
   // one a line
   ...facilityEntities,
   ...peopleEntities,

@@ -4,6 +4,7 @@ import { Animals1764600000003 } from './0003-animals.ts'
 import { Register1764600000004 } from './0004-register.ts'
 import { Signing1764600000010 } from './0010-signing.ts'
 import { Formulary1764600000012 } from './0012-formulary.ts'
+import { Orders1764600000013 } from './0013-orders.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -14,4 +15,5 @@ export const migrations = [
   Register1764600000004,
   Signing1764600000010,
   Formulary1764600000012,
+  Orders1764600000013,
 ]

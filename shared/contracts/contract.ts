@@ -33,8 +33,9 @@ export interface Contract<
   /**
    * `by-record-id`: the body carries the new record's own UUIDv7, for ever the key.
    * `by-key`: a command, sent with an Idempotency-Key header.
+   * `nothing-kept`: a question with a body; it changes nothing.
    */
-  idempotent?: 'by-key' | 'by-record-id'
+  idempotent?: 'by-key' | 'by-record-id' | 'nothing-kept'
   produces?: 'json' | 'csv' | 'pdf' | 'stream' | 'html'
   consumes?: 'json' | 'multipart'
 }

@@ -9,6 +9,8 @@ import * as documents from './documents.contract.ts'
 import * as exports from './exports.contract.ts'
 import * as facility from './facility.contract.ts'
 import * as formulary from './formulary.contract.ts'
+import * as doses from './doses.contract.ts'
+import * as orders from './orders.contract.ts'
 import * as people from './people.contract.ts'
 import * as permits from './permits.contract.ts'
 import * as signing from './signing.contract.ts'
@@ -32,6 +34,8 @@ const modules = [
   waterMap,
   waterVolumes,
   formulary,
+  orders,
+  doses,
   taxa,
   animals,
   animalRecords,

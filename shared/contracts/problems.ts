@@ -68,6 +68,15 @@ export const problemStatus = {
   'already-explained': 409,
   'permit-does-not-cover': 409,
   'fingerprint-not-unique': 409,
+  'order-incomplete': 422,
+  'caution-stops': 409,
+  'cautions-unread': 409,
+  'working-disagrees': 409,
+  'nothing-to-sign': 409,
+  'order-ended': 409,
+  'not-held': 409,
+  'dose-not-possible': 409,
+  'first-calculation-missing': 409,
   'outside-working-order': 500,
 } as const satisfies Record<string, number>
 

@@ -56,6 +56,23 @@ export function readLatestReadings(
   )
 }
 
+/** Readings of one parameter in a span of time, the newest first. */
+export function readParameterSince(
+  db: Db,
+  waterBodyIds: readonly string[],
+  parameter: ReadingParameter,
+  from: Date,
+  until: Date,
+): Promise<ReadingReadRow[]> {
+  return db.query(
+    `SELECT ${readingColumns} FROM ${readingSource}
+      WHERE r.water_body_id = ANY($1) AND r.parameter = $2 AND r.happened_at > $3 AND r.happened_at <= $4
+        AND v.id IS NULL
+      ORDER BY r.happened_at DESC, r.recorded_at DESC`,
+    [[...waterBodyIds], parameter, from, until],
+  )
+}
+
 export interface ReadingFilter {
   q?: string
   parameter?: ReadingParameter

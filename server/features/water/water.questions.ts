@@ -11,6 +11,7 @@ import type { Refusal } from '../../../shared/domain/result.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { placeReads } from '../enclosures/index.ts'
+import { readParameterSince } from './measurement.reads.ts'
 import { readWholeWaterMap } from './read-water-map.ts'
 import { determinationOf } from './volume-now.ts'
 import { readEnclosureWater } from './water-at.ts'
@@ -174,6 +175,17 @@ export function createWaterQuestions(parts: { dataSource: Db }) {
       const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
       const found = enclosure && (await readEnclosureWater(db, enclosure, at))
       return found && factsOf(found)
+    },
+    /** Readings of one parameter in these bodies after `from` up to `until`, the newest first; void ones left out. */
+    async recentReadings(
+      waterBodyIds: readonly string[],
+      parameter: ReadingParameter,
+      from: Date,
+      until: Date,
+      db: Db = parts.dataSource,
+    ): Promise<{ canonicalValue: number; at: string }[]> {
+      const rows = await readParameterSince(db, waterBodyIds, parameter, from, until)
+      return rows.map((row) => ({ canonicalValue: row.canonical_value, at: row.happened_at.toISOString() }))
     },
     /** The whole map with its open/shut ledger, as the engines of clocks and tracing take it. */
     waterMap(db: Db = parts.dataSource): Promise<WaterMap> {

@@ -1,0 +1,80 @@
+import type { Db } from '../../platform/database/db.ts'
+
+export interface DoseReadRow {
+  id: string
+  dose_key: string
+  kind: 'given' | 'recorded' | 'withheld' | 'refused'
+  amount_entered_value: string | null
+  amount_entered_unit: string | null
+  lot_number: string | null
+  note: string | null
+  exceptions_text: string
+  happened_at: Date
+  recorded_at: Date
+  by_name: string
+  stop_at: Date | null
+  stop_by: string | null
+  stop_cause: 'time-up' | 'stopped' | null
+  stop_seen: string | null
+  stop_rescue: string | null
+}
+
+/** Every record of an order's doses, over all its versions, in time order. */
+export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
+  return db.query(
+    `SELECT d.id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note,
+            d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
+            s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
+            s.rescue AS stop_rescue
+       FROM doses d
+       JOIN order_versions v ON v.id = d.order_version_id
+       JOIN people p ON p.id = d.recorded_by
+       LEFT JOIN product_lots t ON t.id = d.lot_id
+       LEFT JOIN LATERAL (SELECT * FROM bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
+       LEFT JOIN people q ON q.id = s.recorded_by
+      WHERE v.order_id = $1 ORDER BY d.happened_at, d.recorded_at`,
+    [orderId],
+  )
+}
+
+export interface CalculationReadRow {
+  id: string
+  part: 'first' | 'second'
+  lot_id: string | null
+  lot_number: string | null
+  amount_entered_value: string
+  amount_entered_unit: string
+  net_volume_litres: number | null
+  agrees: boolean | null
+  difference_percent: number | null
+  recorded_at: Date
+  recorded_by: string
+  by_name: string
+}
+
+/** Calculations for one dose, the newest first. */
+export function readCalculations(
+  db: Db,
+  orderVersionId: string,
+  doseKey: string,
+): Promise<CalculationReadRow[]> {
+  return db.query(
+    `SELECT c.id, c.part, c.lot_id, t.lot_number, c.amount_entered_value, c.amount_entered_unit, c.net_volume_litres,
+            c.agrees, c.difference_percent, c.recorded_at, c.recorded_by, p.printed_name AS by_name
+       FROM dose_calculations c
+       JOIN people p ON p.id = c.recorded_by
+       LEFT JOIN product_lots t ON t.id = c.lot_id
+      WHERE c.order_version_id = $1 AND c.dose_key = $2 ORDER BY c.recorded_at DESC`,
+    [orderVersionId, doseKey],
+  )
+}
+
+export async function readOrderNumberOfDose(db: Db, doseId: string) {
+  const [row]: { number: string; dose_key: string }[] = await db.query(
+    `SELECT o.number, d.dose_key FROM doses d
+       JOIN order_versions v ON v.id = d.order_version_id JOIN orders o ON o.id = v.order_id
+      WHERE d.id = $1`,
+    [doseId],
+  )
+  return row ? { number: row.number, key: row.dose_key } : null
+}

@@ -1,0 +1,45 @@
+import * as contracts from '../../../shared/contracts/doses.contract.ts'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Route } from '../../platform/http/route.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import type { AdministrationsService } from './administrations.service.ts'
+
+export interface AdministrationsQueries {
+  sheet(number: string, key: string, blind: boolean, actor: Actor): Promise<BathSheet>
+  sheetOfDose(doseId: string, actor: Actor): Promise<BathSheet>
+  due(query: QueryOf<typeof contracts.listDueDoses>): Promise<ReplyOf<typeof contracts.listDueDoses>['rows']>
+}
+
+export function administrationRoutes(
+  service: AdministrationsService,
+  queries: AdministrationsQueries,
+): Route[] {
+  return [
+    route(contracts.listDueDoses, async ({ query }) => ({ rows: await queries.due(query) })),
+    route(contracts.getBathSheet, ({ params, query, context }) =>
+      queries.sheet(params.number, params.key, query.blind === 'yes', context.actor),
+    ),
+    route(contracts.calculateFirst, async ({ params, body, context }) => {
+      await service.calculateFirst(context, params.number, params.key, body)
+      return queries.sheet(params.number, params.key, false, context.actor)
+    }),
+    route(contracts.calculateSecond, async ({ params, body, context }) => {
+      await service.calculateSecond(context, params.number, params.key, body)
+      return queries.sheet(params.number, params.key, true, context.actor)
+    }),
+    route(contracts.giveDose, async ({ params, body, context }) => {
+      await service.giveDose(context, params.number, params.key, body)
+      return queries.sheet(params.number, params.key, false, context.actor)
+    }),
+    route(contracts.recordDose, async ({ params, body, context }) => {
+      await service.recordDose(context, params.number, params.key, body)
+      return queries.sheet(params.number, params.key, false, context.actor)
+    }),
+    route(contracts.stopBath, async ({ params, body, context }) => {
+      await service.stopBath(context, params.doseId, body)
+      return queries.sheetOfDose(params.doseId, context.actor)
+    }),
+  ]
+}

@@ -1,0 +1,124 @@
+import type { Product } from '../../../shared/contracts/formulary.contract.ts'
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
+import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import type { CautionAnswer } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
+import type { Drift } from '../../../shared/domain/dose/check-drift.ts'
+import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import type { PlannedDose } from '../../../shared/domain/orders/planned-doses.ts'
+import { known } from '../../../shared/domain/cautions/fact.ts'
+import type { Db } from '../../platform/database/db.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
+import { readDoses } from './administrations.reads.ts'
+import type { DoseReadRow } from './administrations.reads.ts'
+
+export interface DoseSituation {
+  row: OrderRow
+  versionId: string
+  content: SignedOrder
+  block: SignatureBlock
+  planned: PlannedDose
+  /** Every record of the order's doses, over all versions. */
+  records: DoseReadRow[]
+  product: Product | null
+  /** The order worked out again by the facts of the instant; null where the water cannot be read any more. */
+  judgement: OrderJudgement | null
+  answer: CautionAnswer | null
+  drift: Drift | null
+}
+
+export interface DoseSituationParts {
+  dataSource: Db
+  orders: Orders
+  queries: OrderQueries
+}
+
+/** What is known of an order's earlier doses goes into the facts of its spacing. */
+function withSpacing(
+  facts: CautionFacts,
+  content: SignedOrder,
+  records: readonly DoseReadRow[],
+): CautionFacts {
+  const given = records.filter((record) => record.kind === 'given' || record.kind === 'recorded')
+  const { intervalHours, doses } = content.fields
+  const last = given.at(-1)?.happened_at.toISOString() ?? null
+  const dosesGiven = known(
+    new Set(given.map((record) => record.dose_key)).size,
+    null,
+    'the doses recorded here',
+  )
+  if (intervalHours === null) return { ...facts, order: { ...facts.order, dosesGiven } }
+  const spacing = {
+    intervalHours,
+    lastGivenAt: last,
+    givenDoses: given.length,
+    plannedDoses: doses,
+    readingDriven: false,
+  }
+  return {
+    ...facts,
+    order: { ...facts.order, dosesGiven, spacing: known(spacing, null, 'the doses recorded here') },
+  }
+}
+
+/**
+ * One planned dose of the signed version in force, worked out and judged again by the facts of an instant: now before
+ * a dose, or the time of a dose that is being recorded.
+ *
+ * @param lotId the lot in the hand; the one of the order while none is named
+ */
+export async function readDoseSituation(
+  parts: DoseSituationParts,
+  number: string,
+  key: string,
+  at: Date,
+  options: { lotId?: string | null; db?: Db } = {},
+): Promise<DoseSituation> {
+  const sealed = await parts.queries.sealed(number, undefined)
+  if (!sealed.content)
+    throw new Problem('not-found', { detail: 'The signed text of this order cannot be read any more.' })
+  const { content } = sealed
+  const { fields } = content
+  const planned = plannedDoses({
+    startsAt: fields.startsAt ?? sealed.block.signedAt,
+    doses: fields.doses,
+    intervalHours: fields.intervalHours,
+  }).find((dose) => dose.key === key)
+  if (!planned) throw new Problem('not-found', { detail: 'The order plans no such dose.' })
+  const db = options.db ?? parts.dataSource
+  const records = await readDoses(db, sealed.row.id)
+  const found = await parts.orders.judge({ ...fields, lotId: options.lotId ?? fields.lotId }, at, {
+    db,
+    exceptOrderId: sealed.row.id,
+    stage: 'start',
+  })
+  const judgement = found?.judgement ?? null
+  const facts = judgement && withSpacing(judgement.facts, content, records)
+  const volumeNow = found?.situation.water.volume?.netVolumeLitres ?? null
+  const drift =
+    volumeNow === null
+      ? null
+      : checkDrift(content.volume.netVolumeLitres, volumeNow, fields.allowedVolumeDriftPercent)
+  return {
+    row: sealed.row,
+    versionId: sealed.versionId,
+    content,
+    block: sealed.block,
+    planned,
+    records,
+    product: found?.product ?? null,
+    judgement,
+    answer:
+      facts &&
+      evaluateCautions({
+        facts,
+        stage: 'start',
+        factsAtSigning: content.facts as unknown as CautionFacts,
+      }),
+    drift: drift?.ok ? drift.value : null,
+  }
+}

@@ -1,0 +1,49 @@
+import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
+import type { listDueDoses } from '../../../shared/contracts/doses.contract.ts'
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
+import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
+import { agentNames } from '../../../shared/messages/formulary.ts'
+import type { Db } from '../../platform/database/db.ts'
+import type { OrderQueries } from '../orders/index.ts'
+import { readDoses } from './administrations.reads.ts'
+
+type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
+
+const aheadHours = 24
+const singleDoseHours = 24
+
+/** Doses that are due until an instant, late, or running now, in time order. */
+export async function findDueDoses(
+  parts: { dataSource: Db; queries: OrderQueries; now(): Date },
+  query: QueryOf<typeof listDueDoses>,
+): Promise<DueDose[]> {
+  const now = parts.now().toISOString()
+  const until = query.until ?? addHours(now, aheadHours)
+  const orders = await parts.queries.open()
+  const found: DueDose[] = []
+  for (const { row, plan } of orders) {
+    const records = await readDoses(parts.dataSource, row.id)
+    const window = doseWindow(plan.intervalHours ?? singleDoseHours)
+    for (const dose of plannedDoses(plan)) {
+      const mine = records.filter((record) => record.dose_key === dose.key)
+      const running = mine.some(
+        (record) => record.stop_at === null && record.kind !== 'withheld' && plan.timed,
+      )
+      if ((mine.length > 0 && !running) || Date.parse(dose.dueAt) > Date.parse(until)) continue
+      const latestAt = addHours(dose.dueAt, window.lateHours)
+      const late = Date.parse(now) > Date.parse(latestAt)
+      found.push({
+        number: row.number,
+        key: dose.key,
+        dueAt: dose.dueAt,
+        latestAt,
+        enclosureCode: row.enclosureCode,
+        drug: row.agent ? agentNames[row.agent] : '',
+        amountText: row.amountText,
+        state: running ? 'running' : row.phase === 'held' ? 'held' : late ? 'late' : 'due',
+      })
+    }
+  }
+  return found.sort((a, b) => Date.parse(a.dueAt) - Date.parse(b.dueAt))
+}

@@ -1,0 +1,212 @@
+import type {
+  AgentUse,
+  AnimalInWater,
+  CautionFacts,
+  OnOff,
+} from '../../../shared/domain/cautions/caution-facts.ts'
+import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
+import type { Fact } from '../../../shared/domain/cautions/fact.ts'
+import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
+import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
+import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
+import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
+import type { Db } from '../../platform/database/db.ts'
+import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
+import type { WaterFacts, WaterQuestions } from '../water/index.ts'
+import { readAgentUses, readExperiencedTaxa, readGivenInLast24h } from './agent-history.reads.ts'
+import type { AgentUseRow } from './agent-history.reads.ts'
+
+/** Salinities that part the kinds of water. Project default: no outside authority. */
+const freshBelow = 1
+const marineFrom = 20
+/** mg/L of calcium carbonate in one milliequivalent per litre: half its molar mass. */
+const mgCaCO3PerMeq = 50.043
+const hoursOfTemperatures = 4
+
+export interface BathSituation {
+  base: BathFacts
+  water: WaterFacts
+  /** Everybody in the connected water. */
+  animals: AnimalFacts[]
+}
+
+export interface BathFactsParts {
+  dataSource: Db
+  water: WaterQuestions
+  animals: AnimalQuestions
+  zone(): Promise<string>
+}
+
+/**
+ * The one reader of facts for cautions about a bath: assembles what is known, at one instant, of the water that is
+ * joined to an enclosure, of everybody in it, and of what was given into it. What no table holds stays unknown.
+ */
+export function createBathFactsReader(parts: BathFactsParts) {
+  return {
+    /** @returns null when there is no such enclosure or it has no water */
+    async read(
+      enclosureId: string,
+      agent: AgentCode,
+      at: Date,
+      options: { db?: Db; exceptOrderId?: string | null } = {},
+    ): Promise<BathSituation | null> {
+      const db = options.db ?? parts.dataSource
+      const water = await parts.water.connectedWaterAt(enclosureId, at, db)
+      if (!water) return null
+      const enclosureIds = water.enclosures.map((enclosure) => enclosure.id)
+      const animals = await parts.animals.animalsIn(enclosureIds, at, db)
+      const taxonIds = [...new Set(animals.map((animal) => animal.taxonId))]
+      // One after the other: inside a transaction there is one connection
+      const uses = await readAgentUses(db, enclosureIds, at, options.exceptOrderId ?? null)
+      const given = await readGivenInLast24h(db, enclosureIds, agent, at)
+      const experienced = await readExperiencedTaxa(db, agent, taxonIds, at)
+      const temperatures = await parts.water.recentReadings(
+        water.bodies.map((body) => body.id),
+        'temperature',
+        new Date(at.getTime() - hoursOfTemperatures * 3_600_000),
+        at,
+        db,
+      )
+      const zone = await parts.zone()
+      const newTaxa = animals
+        .filter((animal) => !experienced.has(animal.taxonId))
+        .map((a) => a.scientificName)
+      const base: BathFacts = {
+        at: at.toISOString(),
+        zone,
+        water: waterFacts(water, temperatures),
+        animals: {
+          inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
+          unwellPercent: unknown(),
+          handledInLast24h: unknown(),
+          withoutExperience: known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here'),
+        },
+        volume: { determination: volumeFact(water) },
+        lifeSupport: {
+          carbon: machineFact(water, 'carbon'),
+          ozone: machineFact(water, 'ozone'),
+          uv: machineFact(water, 'uv'),
+          foamFractionator: machineFact(water, 'foam-fractionator'),
+          aeration: machineFact(water, 'aeration'),
+          lights: unknown(),
+        },
+        history: {
+          agentUses: known(
+            uses.map((row) => agentUse(row, at)),
+            at.toISOString(),
+            'the orders',
+          ),
+          givenInLast24hMgPerL: given.unclear
+            ? unknown()
+            : known(given.totalMgPerL, at.toISOString(), 'the doses recorded here'),
+          reducerInUse: unknown(),
+        },
+      }
+      return { base, water, animals }
+    },
+  }
+}
+
+export type BathFactsReader = ReturnType<typeof createBathFactsReader>
+
+function animalInWater(animal: AnimalFacts): AnimalInWater {
+  return {
+    animalId: animal.animalId,
+    label: animal.accession,
+    commonName: animal.commonName,
+    scientificName: animal.scientificName,
+    taxonGroup: animal.taxonGroup,
+    lifeStage: animal.stage,
+    enclosureCode: animal.enclosureCode ?? '',
+    dailyTemperatureUnits: null,
+  }
+}
+
+/** The newest reading of a parameter in any of the joined bodies. */
+function readingFact(water: WaterFacts, parameter: ReadingParameter, factor = 1): Fact<number> {
+  const newest = water.latestReadings
+    .filter((reading) => reading.parameter === parameter)
+    .sort((a, b) => b.at.localeCompare(a.at))[0]
+  return newest
+    ? known(
+        newest.canonicalValue * factor,
+        newest.at,
+        `${newest.waterBodyCode}, ${newest.value} ${newest.unit}`,
+      )
+    : unknown()
+}
+
+function waterKind(water: WaterFacts): CautionFacts['water']['kind'] {
+  const salinity = readingFact(water, 'salinity')
+  if (salinity.state !== 'known') return unknown()
+  const kind = salinity.value < freshBelow ? 'fresh' : salinity.value >= marineFrom ? 'marine' : 'brackish'
+  return { ...salinity, value: kind }
+}
+
+function waterFacts(
+  water: WaterFacts,
+  temperatures: readonly { canonicalValue: number; at: string }[],
+): CautionFacts['water'] {
+  return {
+    kind: waterKind(water),
+    temperatureC: readingFact(water, 'temperature'),
+    recentTemperaturesC:
+      temperatures.length === 0
+        ? unknown()
+        : known(
+            temperatures.map((reading) => ({ value: reading.canonicalValue, at: reading.at })),
+            temperatures[0]?.at ?? null,
+            'the readings of the last 4 h',
+          ),
+    oxygenMgPerL: readingFact(water, 'dissolved-oxygen'),
+    pH: readingFact(water, 'ph'),
+    alkalinityMgPerLCaCO3: readingFact(water, 'alkalinity', mgCaCO3PerMeq),
+    hardnessMgPerLCaCO3: readingFact(water, 'hardness', mgCaCO3PerMeq),
+    freeCopperMgPerL: readingFact(water, 'copper-free'),
+    totalCopperMgPerL: readingFact(water, 'copper-total'),
+    oxygenIsLogged: unknown(),
+    hasBloom: unknown(),
+    hasPlantsOrAlgae: unknown(),
+  }
+}
+
+function machineFact(water: WaterFacts, kind: LifeSupportKind): Fact<OnOff> {
+  const machines = water.lifeSupport.filter((machine) => machine.kind === kind)
+  if (machines.length === 0) return notApplicable()
+  const running = machines.find((machine) => machine.on === true)
+  if (running) return known('on', running.since, `${running.code}, from the life-support log`)
+  const unrecorded = machines.find((machine) => machine.on === null)
+  if (unrecorded) return unknown()
+  return known('off', machines[0]?.since ?? null, 'the life-support log')
+}
+
+/** Only a confirmed determination that holds for the valves as they stand is a volume to dose by. */
+function volumeFact(water: WaterFacts): CautionFacts['volume']['determination'] {
+  const { volume, volumeRefusal } = water
+  if (!volume || volumeRefusal) return unknown()
+  return known(
+    {
+      netVolumeLitres: volume.netVolumeLitres,
+      method: volume.method,
+      displacementSubtracted: volume.displacementSubtracted,
+      errorPercent: volume.errorPercent,
+      determinedOn: volume.measuredOn,
+      holdsForValves: volume.holdsForThisValveState,
+    },
+    volume.measuredAt,
+    'the volume determination',
+  )
+}
+
+function agentUse(row: AgentUseRow, at: Date): AgentUse {
+  const until = row.discontinued_at ? (row.timed ? row.discontinued_at : null) : row.ends_at
+  const started = row.last_given_at !== null
+  const ended = until !== null && until <= at
+  return {
+    agent: row.agent as AgentCode,
+    orderNumber: row.number,
+    state: ended ? 'ended' : started ? 'running' : 'ordered',
+    from: (row.last_given_at ?? row.starts_at).toISOString(),
+    until: until?.toISOString() ?? null,
+  }
+}

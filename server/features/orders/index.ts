@@ -1,0 +1,78 @@
+import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
+import type { Db } from '../../platform/database/db.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { Parts } from '../../platform/parts.ts'
+import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
+import type { Animals } from '../animals/index.ts'
+import type { Documents } from '../documents/index.ts'
+import { placeReads } from '../enclosures/index.ts'
+import type { FacilityService } from '../facility/index.ts'
+import type { Formulary } from '../formulary/index.ts'
+import type { SigningService } from '../signing/index.ts'
+import type { Water } from '../water/index.ts'
+import { createBathFactsReader } from './bath-facts.ts'
+import {
+  AgentExperience,
+  OrderEventRow,
+  OrderHead,
+  OrderVersion,
+  OrderVersionAnimal,
+} from './order.entity.ts'
+import { readSituation } from './order-situation.ts'
+import { createOrderQueries } from './orders.queries.ts'
+import { orderRoutes } from './orders.routes.ts'
+import { createOrdersService } from './orders.service.ts'
+import { createOrderPrinter } from './print-order.ts'
+
+export type { OrdersService } from './orders.service.ts'
+export type { OrderQueries } from './orders.queries.ts'
+export type { SignedOrder } from './order-content.ts'
+export type { BathFactsReader } from './bath-facts.ts'
+export const orderEntities = [OrderHead, OrderVersion, OrderVersionAnimal, OrderEventRow, AgentExperience]
+
+export interface OrdersOutside extends Parts {
+  facility: FacilityService
+  signing: SigningService
+  formulary: Formulary
+  water: Water
+  animals: Animals
+  documents: Documents
+  pdf: PdfPool
+}
+
+export function createOrders(parts: OrdersOutside) {
+  const { dataSource, clock, facility, signing, formulary } = parts
+  const now = () => clock.now()
+  const facts = createBathFactsReader({
+    dataSource,
+    water: parts.water.questions,
+    animals: parts.animals.questions,
+    zone: () => facility.zone(),
+  })
+  const situation = {
+    facts,
+    product: (id: string) => formulary.queries.product(id),
+    doseLine: (id: string) => formulary.queries.doseLine(id),
+  }
+  const service = createOrdersService({
+    ...parts,
+    ...situation,
+    enclosureName: async (id) => (await placeReads.readEnclosure(dataSource, { id }))?.name ?? '',
+  })
+  const queries = createOrderQueries({ dataSource, signing, now })
+  const print = createOrderPrinter({ ...parts, documents: parts.documents.service, queries })
+  /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
+  const judge = (
+    fields: BathOrderFields,
+    at: Date,
+    options: { db?: Db; exceptOrderId?: string | null; stage?: CautionStage },
+  ) =>
+    readSituation(situation, fields, at, options).catch((error: unknown) => {
+      if (error instanceof Problem && error.code === 'not-found') return null
+      throw error
+    })
+  return { service, queries, judge, print, routes: orderRoutes({ service, queries, situation, now, print }) }
+}
+
+export type Orders = ReturnType<typeof createOrders>

@@ -1,0 +1,279 @@
+import type {
+  DocumentBlock,
+  PdfDocumentModel,
+  SignatureEntry,
+} from '../../../shared/domain/documents/pdf-document-model.ts'
+import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { documentWords } from '../../../shared/messages/documents.ts'
+import { basisNames } from '../../../shared/messages/formulary.ts'
+import { orderPaper, orderWords } from '../../../shared/messages/orders.ts'
+import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { standingCaution } from '../../platform/pdf/standing-caution.ts'
+import type { SignedOrder } from './order-content.ts'
+
+export interface OrderPaper {
+  content: SignedOrder
+  block: SignatureBlock
+  row: OrderRow
+  superseded: boolean
+  facility: string
+  paper: 'a4' | 'letter'
+  printedBy: string
+  printedAt: string
+}
+
+/** A state of the order that no page may hide; null when doses may be given from it. */
+function noticeOf({ block, row, superseded, content }: OrderPaper): string | null {
+  if (block.state !== 'intact') return block.state === 'broken' ? orderPaper.broken : orderPaper.unknownKey
+  if (superseded)
+    return documentWords.supersededNotice({ version: orderPaper.version({ n: content.versionNo + 1 }) })
+  if (row.phase === 'held') return documentWords.heldNotice
+  if (row.phase === 'discontinued') return orderPaper.discontinued
+  if (row.phase === 'expired') return orderPaper.expired
+  return row.phase === 'completed' ? orderPaper.completed : null
+}
+
+function productBlock({ content }: OrderPaper): DocumentBlock {
+  const { amount, product, lot } = content
+  const measured = amount.measured ?? { value: String(amount.unrounded), unit: amount.unroundedUnit }
+  const { number, symbol } = formatDose(measured.value, measured.unit as UnitCode)
+  const strength = formatDose(product.strength.value, product.strength.unit as UnitCode).text
+  return {
+    kind: 'amount',
+    value: number,
+    unit: symbol,
+    lines: [
+      [
+        { text: product.establishedName, bold: true },
+        { text: ` (${product.productName}), ` },
+        {
+          text: orderPaper.strength({
+            strength,
+            basis: basisNames[product.strengthBasis as keyof typeof basisNames],
+          }),
+        },
+        {
+          text: lot
+            ? orderPaper.lot({ lot: lot.lotNumber, expires: sayDate(lot.expiresOn) })
+            : orderPaper.noLot,
+        },
+        { text: orderPaper.into, bold: true },
+      ],
+    ],
+    ...(amount.rangeText ? { limits: orderPaper.range({ range: amount.rangeText }) } : {}),
+  }
+}
+
+function particulars({ content, block }: OrderPaper): DocumentBlock {
+  const { fields, doseLine } = content
+  const entries = [
+    { label: orderPaper.problem, value: fields.problem },
+    { label: orderPaper.target, value: `${content.targetText} ${content.basisText}` },
+    ...(doseLine
+      ? [{ label: orderPaper.doseLine, value: `${doseLine.text}; ${doseLine.citation} (${doseLine.mark})` }]
+      : []),
+    {
+      label: orderPaper.contact,
+      value:
+        fields.timing === 'timed' && fields.contactMinutes !== null
+          ? formatDose(fields.contactMinutes, 'min').text
+          : orderPaper.contactIndefinite,
+    },
+    {
+      label: orderPaper.doses,
+      value: orderPaper.dosesText({ doses: fields.doses, hours: fields.intervalHours }),
+    },
+    {
+      label: orderPaper.start,
+      value: fields.startsAt ? sayInstantWithOffset(fields.startsAt, block.zone) : '',
+    },
+    {
+      label: orderPaper.use,
+      value: fields.use === 'extralabel' ? orderPaper.extralabel : orderPaper.asLabelled,
+    },
+    {
+      label: orderPaper.water,
+      value: orderPaper.waterText({
+        bodies: content.water.bodies.join(', '),
+        valves: content.valves.map((valve) => orderPaper.valve(valve)).join(', '),
+      }),
+    },
+    ...(fields.instructions === '' ? [] : [{ label: orderPaper.how, value: fields.instructions }]),
+  ]
+  return { kind: 'grid', entries }
+}
+
+function workingBlock({ content }: OrderPaper): DocumentBlock {
+  const last = content.working.length - 1
+  const lines = content.working.map((line, i) => ({
+    what: line.label,
+    formula: line.shown,
+    result: line.result,
+    total: i === last,
+  }))
+  return { kind: 'working', lines }
+}
+
+function cautionBlocks({ content, block }: OrderPaper): DocumentBlock[] {
+  if (content.cautions.length === 0) return [{ kind: 'paragraph', text: orderPaper.noCautions }]
+  return content.cautions.map((caution) => {
+    const override = content.overrides.find((one) => one.ruleId === caution.ruleId)
+    return {
+      kind: 'caution',
+      level: caution.level,
+      title: caution.title,
+      lines: [caution.text],
+      ...(override && caution.level === 'stop'
+        ? {
+            override: [
+              { text: orderPaper.overridden({ name: block.printedName }), bold: true },
+              { text: orderPaper.reason({ reason: override.reason }) },
+            ],
+          }
+        : {}),
+    }
+  })
+}
+
+function animalsBlock({ content }: OrderPaper): DocumentBlock {
+  return {
+    kind: 'table',
+    columns: [
+      { head: orderPaper.accession, share: 1 },
+      { head: orderPaper.animal, share: 2.6 },
+      { head: orderPaper.count, share: 1.2 },
+      { head: orderPaper.place, share: 0.9 },
+      { head: orderPaper.treated, share: 1.3 },
+    ],
+    rows: content.water.animals.map((animal) => [
+      animal.accession,
+      [{ text: `${animal.commonName} ` }, { text: animal.scientificName, italic: true }],
+      animal.countText,
+      animal.enclosureCode,
+      animal.treated ? orderPaper.yes : orderPaper.shares,
+    ]),
+    emptyText: orderPaper.noAnimals,
+  }
+}
+
+function givenBlock({ content, block }: OrderPaper): DocumentBlock {
+  const { fields, amount } = content
+  const unit = amount.measured?.unit ?? amount.unroundedUnit
+  const planned = fields.startsAt
+    ? plannedDoses({ startsAt: fields.startsAt, doses: fields.doses, intervalHours: fields.intervalHours })
+    : []
+  return {
+    kind: 'table',
+    boxed: true,
+    columns: [
+      { head: orderPaper.dose, share: 0.7 },
+      { head: orderPaper.due, share: 1.5 },
+      { head: orderPaper.second, share: 1.6 },
+      { head: orderPaper.measured, share: 1.6 },
+      { head: orderPaper.started, share: 1.1 },
+      { head: orderPaper.ended, share: 1.1 },
+      { head: orderPaper.by, share: 1.4 },
+    ],
+    rows: planned.map((dose) => [
+      dose.key,
+      sayInstant(dose.dueAt, block.zone),
+      { pen: true, unit },
+      { pen: true, unit },
+      { pen: true },
+      { pen: true },
+      { pen: true },
+    ]),
+    emptyText: orderWords.noVolume,
+  }
+}
+
+function signatureOf(block: SignatureBlock): SignatureEntry {
+  const words = {
+    intact: documentWords.recordIntact,
+    broken: documentWords.recordBroken,
+    'unknown-key': orderPaper.unknownKey,
+  }
+  return {
+    name: block.printedName,
+    role: orderPaper.role,
+    licence: orderPaper.licence({ number: block.licence.number, until: sayDate(block.licence.validUntil) }),
+    jurisdiction: block.licence.jurisdiction,
+    meaning: orderPaper.meaning({ meaning: block.meaning }),
+    signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
+    check: block.state === 'intact' ? 'intact' : 'broken',
+    checkWords: words[block.state],
+  }
+}
+
+/** A signed order on paper. Everything comes from the signed text, and the check of that text stands on every page. */
+export function orderDocument(paper: OrderPaper): PdfDocumentModel {
+  const { content, block } = paper
+  const signedAt = sayInstantWithOffset(block.signedAt, block.zone, 'second')
+  const short = formatFingerprint(block.hash)
+  const notice = noticeOf(paper)
+  const usesMicrolitres = content.targetText.includes('L/L')
+  const treated = content.water.animals.filter((animal) => animal.treated)
+  const volume = content.water.volumeText ?? ''
+  return {
+    title: orderPaper.title({ number: content.number, n: content.versionNo }),
+    language: 'en',
+    paper: paper.paper,
+    head: {
+      facility: paper.facility,
+      name: orderWords.order,
+      number: content.number,
+      version: orderPaper.version({ n: content.versionNo }),
+      source: usesMicrolitres ? orderPaper.sourceMicrolitres : orderPaper.source,
+      subject: {
+        name: content.enclosure.code,
+        lines: [
+          content.enclosure.name,
+          ...treated.slice(0, 3).map((animal) => `${animal.countText}, ${animal.commonName}`),
+        ],
+      },
+    },
+    signers: [orderPaper.signedBy({ name: block.printedName, at: signedAt })],
+    ...(short.ok ? { recordCheck: short.value } : {}),
+    ...(notice === null ? {} : { notice }),
+    printed: {
+      by: paper.printedBy,
+      at: sayInstantWithOffset(paper.printedAt, block.zone),
+      atIso: paper.printedAt,
+      note: documentWords.laterVersion,
+    },
+    blocks: [
+      {
+        kind: 'columns',
+        divided: true,
+        columns: [
+          { share: 1, blocks: [productBlock(paper)] },
+          { share: 1.25, blocks: [particulars(paper)] },
+        ],
+      },
+      { kind: 'rule' },
+      {
+        kind: 'heading',
+        text: orderPaper.volumeHeading({ volume, note: content.water.volumeNote ?? '' }),
+      },
+      { kind: 'heading', text: orderPaper.workingHeading },
+      workingBlock(paper),
+      { kind: 'heading', text: orderPaper.conditionsHeading },
+      { kind: 'conditions', columns: 2, items: content.conditions.map((condition) => condition.text) },
+      { kind: 'heading', text: orderPaper.cautionsHeading },
+      ...cautionBlocks(paper),
+      { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
+      { kind: 'heading', text: orderPaper.animalsHeading },
+      animalsBlock(paper),
+      { kind: 'heading', text: orderPaper.givenHeading },
+      givenBlock(paper),
+      { kind: 'signatures', entries: [signatureOf(block)] },
+      { kind: 'fingerprint', label: orderPaper.fingerprint, fingerprint: block.hash },
+      standingCaution(),
+    ],
+  }
+}

@@ -1,0 +1,129 @@
+import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { Product, DoseLine } from '../../../shared/contracts/formulary.contract.ts'
+import { copperInPentahydrate } from '../../../shared/domain/dose/copper.ts'
+import type { BathProduct } from '../../../shared/domain/dose/bath-product.ts'
+import type { BathOrderDraft, ChosenProduct } from '../../../shared/domain/orders/bath-order-draft.ts'
+import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.ts'
+import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
+import type { ConcentrationUnit } from '../../../shared/domain/cautions/caution-facts.ts'
+import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { orderMissing } from '../../../shared/messages/orders.ts'
+import type { OrderField } from '../../../shared/messages/orders.ts'
+import type { Db } from '../../platform/database/db.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { BathFactsReader, BathSituation } from './bath-facts.ts'
+
+export interface SituationParts {
+  facts: BathFactsReader
+  product(id: string): Promise<Product>
+  doseLine(id: string): Promise<DoseLine>
+}
+
+/** An order judged at one instant, together with everything it was judged by. */
+export interface OrderSituation {
+  situation: BathSituation
+  product: Product | null
+  line: DoseLine | null
+  judgement: OrderJudgement | null
+}
+
+const nothingTyped: Quantity = { value: '', unit: 'mg/L' }
+
+/** The draft in the terms of the engines. What nobody filled in stays missing and is refused there. */
+export function draftOf(fields: BathOrderFields): BathOrderDraft {
+  return {
+    target: { concentration: (fields.target as Quantity | null) ?? nothingTyped, basis: fields.basis },
+    timing: fields.timing,
+    contactMinutes: fields.contactMinutes,
+    doses: fields.doses,
+    intervalHours: fields.intervalHours,
+    startsAt: fields.startsAt,
+    setting: fields.setting,
+    division: (fields.division as Quantity | null) ?? { value: '', unit: 'g' },
+    stated: fields.stated,
+  }
+}
+
+/** A product of the formulary in the terms of the dose engine. */
+export function chosenOf(product: Product, line: DoseLine | null, lotId: string | null): ChosenProduct {
+  const lot = product.lots.find((one) => one.id === lotId) ?? null
+  const bath: BathProduct = {
+    form: product.form === 'liquid' ? 'liquid' : 'solid',
+    strength: { value: product.strength.value, unit: product.strength.unit as UnitCode },
+    ...(product.strengthBasis === 'product' ? {} : { strengthBasis: product.strengthBasis }),
+    ...(product.agent === 'copper-sulfate' ? { share: copperInPentahydrate } : {}),
+    ...(product.densityGPerMl === null
+      ? {}
+      : { density: { value: String(product.densityGPerMl), unit: 'g/mL' as const } }),
+  }
+  return {
+    agent: product.agent,
+    product: bath,
+    lot: lot && { expiresOn: lot.expiresOn, state: lot.state },
+    line: line && {
+      low: line.low,
+      high: line.high,
+      unit: line.unit as ConcentrationUnit,
+      basis: line.basis,
+      longestContactMinutes: line.longestContactMinutes,
+    },
+  }
+}
+
+/** Reads the facts of an instant and judges the order by them: the one way, while writing, at signing and at the dose. */
+export async function readSituation(
+  parts: SituationParts,
+  fields: BathOrderFields,
+  at: Date,
+  options: { db?: Db; exceptOrderId?: string | null; stage?: CautionStage } = {},
+): Promise<OrderSituation> {
+  const product = fields.productId === null ? null : await parts.product(fields.productId)
+  const line = fields.doseLineId === null ? null : await parts.doseLine(fields.doseLineId)
+  const agent = product?.agent ?? 'sodium-chloride'
+  const situation = await parts.facts.read(fields.enclosureId, agent, at, options)
+  if (!situation)
+    throw new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
+  const judgement = product
+    ? judgeBathOrder(
+        situation.base,
+        draftOf(fields),
+        chosenOf(product, line, fields.lotId),
+        {},
+        options.stage,
+      )
+    : null
+  return { situation, product, line, judgement }
+}
+
+/** Fields that have to be filled before the order can be signed. */
+export function missingFields(fields: BathOrderFields): OrderField[] {
+  const missing: OrderField[] = []
+  const need = (field: OrderField, there: boolean) => void (there || missing.push(field))
+  need('animalIds', fields.animalIds.length > 0)
+  need('productId', fields.productId !== null)
+  need('problem', fields.problem !== '')
+  need('use', fields.use !== null)
+  need('target', fields.target !== null)
+  need('basis', fields.basis !== null)
+  need('timing', fields.timing !== null)
+  need('contactMinutes', fields.timing !== 'timed' || fields.contactMinutes !== null)
+  need('intervalHours', fields.doses === 1 || fields.intervalHours !== null)
+  need('startsAt', fields.startsAt !== null)
+  need('setting', fields.setting !== null)
+  need('division', fields.division !== null)
+  need('stopIf', fields.stopIf !== '')
+  return missing
+}
+
+export function missingProblem(missing: readonly OrderField[]): Problem {
+  return new Problem('order-incomplete', {
+    detail: missing.map((field) => orderMissing[field]).join(' '),
+    errors: missing.map((field) => ({
+      pointer: `/fields/${field}`,
+      detail: orderMissing[field],
+      code: 'missing',
+    })),
+  })
+}

@@ -1,0 +1,79 @@
+import type { BathOrderFields, OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
+import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
+import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import type { SignedOrder } from './order-content.ts'
+import type { OrderReadRow } from './orders.reads.ts'
+
+/** A single dose has no interval; it may be given within a day of its time. Project default. */
+const singleDoseHours = 24
+
+function standingOfRow(row: OrderReadRow): OrderStanding {
+  const signed =
+    row.starts_at && row.doses !== null
+      ? plannedDoses({
+          startsAt: row.starts_at.toISOString(),
+          doses: row.doses,
+          intervalHours: row.interval_hours,
+        })
+      : null
+  const last = signed?.at(-1)
+  const window = doseWindow(row.interval_hours ?? singleDoseHours)
+  return {
+    stage: row.stage,
+    signed:
+      signed && last
+        ? {
+            planned: signed,
+            doneKeys: row.done_keys,
+            lastWindowUntil: addHours(last.dueAt, window.lateHours),
+          }
+        : null,
+    held: row.held,
+    ended: row.ended,
+  }
+}
+
+/** What the signature says, read for showing; columns beside the text are never shown in its place. */
+function signedContent(row: OrderReadRow): SignedOrder | null {
+  if (row.signed_text === null) return null
+  try {
+    return (JSON.parse(row.signed_text) as { content: SignedOrder }).content
+  } catch {
+    return null
+  }
+}
+
+export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
+  const standing = standingOfRow(row)
+  const phase = orderPhase(standing, now)
+  const content = signedContent(row)
+  const draft = row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields)
+  const isOpen = phase === 'not-started' || phase === 'in-progress' || phase === 'held'
+  const next = standing.signed?.planned.find((dose) => !row.done_keys.includes(dose.key))
+  return {
+    id: row.id,
+    number: row.number,
+    phase,
+    enclosureCode: row.enclosure_code,
+    enclosureName: row.enclosure_name,
+    agent: row.agent as OrderRow['agent'],
+    problem: content?.fields.problem ?? draft?.problem ?? '',
+    amountText:
+      row.amount_entered_value === null
+        ? null
+        : formatDose(row.amount_entered_value, row.amount_entered_unit as UnitCode).text,
+    targetText: content?.targetText ?? null,
+    startsAt: row.starts_at?.toISOString() ?? draft?.startsAt ?? null,
+    signedBy: row.signed_by_name,
+    signedAt: row.signed_at?.toISOString() ?? null,
+    versionNo: row.version_no,
+    dosesGiven: row.given,
+    doses: row.doses,
+    nextDueAt: isOpen && next ? next.dueAt : null,
+  }
+}

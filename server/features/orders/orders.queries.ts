@@ -1,0 +1,148 @@
+import type { Order, OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import type { QueryOf } from '../../../shared/contracts/contract.ts'
+import type { listOrders } from '../../../shared/contracts/orders.contract.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
+import type { Action } from '../../../shared/domain/permissions/table.ts'
+import type { Db } from '../../platform/database/db.ts'
+import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import type { SigningService } from '../signing/index.ts'
+import type { SignedOrder } from './order-content.ts'
+import { presentOrderRow } from './orders.present.ts'
+import { readEvents, readOrder, readOrders, readVersions } from './orders.reads.ts'
+
+export interface OrderQueriesParts {
+  dataSource: Db
+  signing: SigningService
+  now(): Date
+}
+
+const ended = new Set(['completed', 'expired', 'discontinued'])
+const mayBe: Action[] = [
+  'order.draft',
+  'order.sign',
+  'order.amend',
+  'order.hold',
+  'hold.lift',
+  'order.discontinue',
+  'order.print',
+  'dose.give',
+  'dose.record',
+  'dose.calculate-second',
+]
+
+const sortKeys: Record<string, (row: OrderRow) => string> = {
+  number: (row) => row.number,
+  startsAt: (row) => row.startsAt ?? '',
+  enclosure: (row) => row.enclosureCode,
+  signedAt: (row) => row.signedAt ?? '',
+}
+
+export interface SealedVersion {
+  versionNo: number
+  content: SignedOrder | null
+  block: SignatureBlock
+}
+
+export function createOrderQueries(parts: OrderQueriesParts) {
+  async function rowOf(number: string) {
+    const row = await readOrder(parts.dataSource, number)
+    if (!row) throw new Problem('not-found')
+    return row
+  }
+
+  return {
+    async list(query: QueryOf<typeof listOrders>) {
+      const page = pageOf(query)
+      const now = parts.now().toISOString()
+      const rows = (await readOrders(parts.dataSource, query)).map((row) => presentOrderRow(row, now))
+      const { phase } = query
+      const found = rows.filter((row) =>
+        phase === undefined ? true : phase === 'open' ? !ended.has(row.phase) : row.phase === phase,
+      )
+      const key = sortKeys[query.sort ?? 'number']
+      const sign = query.direction === 'asc' ? 1 : -1
+      if (key) found.sort((a, b) => sign * key(a).localeCompare(key(b)))
+      return {
+        rows: found.slice(page.offset, page.offset + page.limit),
+        total: found.length,
+        nextCursor: nextCursorOf(page, found.length),
+      }
+    },
+
+    async order(number: string, actor: Actor): Promise<Order> {
+      const row = await rowOf(number)
+      const [versions, events] = await Promise.all([
+        readVersions(parts.dataSource, row.id),
+        readEvents(parts.dataSource, row.id),
+      ])
+      const sealed = await Promise.all(
+        versions.map(async (version) => ({
+          versionNo: version.version_no,
+          ...(await parts.signing.readSealed(version.signed_text_id)),
+        })),
+      )
+      return {
+        ...presentOrderRow(row, parts.now().toISOString()),
+        version: row.version,
+        draft: row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields),
+        createdBy: row.created_by_name ?? '',
+        createdAt: row.created_at.toISOString(),
+        versions: sealed.map(({ versionNo, block, content }, i) => ({
+          versionNo,
+          signature: block,
+          content,
+          superseded: i > 0,
+        })),
+        events: events.map((event) => ({
+          id: event.id,
+          kind: event.kind,
+          reason: event.reason,
+          happenedAt: event.happened_at.toISOString(),
+          by: event.by_name ?? '',
+        })),
+        may: mayBe.filter((action) => decide(action, actor.roles).allowed),
+      }
+    },
+
+    /** Signed orders that are not ended, with their plan: what worklists ask. */
+    async open() {
+      const now = parts.now().toISOString()
+      const rows = await readOrders(parts.dataSource, {})
+      return rows.flatMap((row) => {
+        const shown = presentOrderRow(row, now)
+        const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
+        if (!isOpen || row.starts_at === null || row.doses === null) return []
+        const plan = {
+          startsAt: row.starts_at.toISOString(),
+          doses: row.doses,
+          intervalHours: row.interval_hours,
+          timed: row.contact_minutes !== null,
+        }
+        return [{ row: shown, plan }]
+      })
+    },
+
+    /** One signed version, checked now, with where the order stands, for paper. */
+    async sealed(number: string, versionNo: number | undefined) {
+      const row = await rowOf(number)
+      const versions = await readVersions(parts.dataSource, row.id)
+      const wanted = versions.find((version) => versionNo === undefined || version.version_no === versionNo)
+      if (!wanted) throw new Problem('not-found', { detail: 'This order has no such signed version.' })
+      const { content, block } = await parts.signing.readSealed(wanted.signed_text_id)
+      return {
+        row: presentOrderRow(row, parts.now().toISOString()),
+        versionId: wanted.id,
+        versionNo: wanted.version_no,
+        superseded: wanted !== versions[0],
+        content: content as unknown as SignedOrder | null,
+        block,
+      }
+    },
+  }
+}
+
+export type OrderQueries = ReturnType<typeof createOrderQueries>

@@ -1,0 +1,104 @@
+import type { Db } from '../../platform/database/db.ts'
+
+export interface OrderReadRow {
+  id: string
+  number: string
+  enclosure_id: string
+  enclosure_code: string
+  enclosure_name: string
+  stage: 'draft' | 'proposed' | 'none'
+  draft_text: string | null
+  created_at: Date
+  created_by_name: string | null
+  version: number
+  version_id: string | null
+  version_no: number | null
+  signed_text_id: string | null
+  agent: string | null
+  amount_entered_value: string | null
+  amount_entered_unit: string | null
+  doses: number | null
+  interval_hours: number | null
+  contact_minutes: number | null
+  starts_at: Date | null
+  signed_at: Date | null
+  signed_by_name: string | null
+  signed_text: string | null
+  held: boolean
+  ended: boolean
+  done_keys: string[]
+  given: number
+}
+
+const columns = `
+  o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
+  o.created_at, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
+  v.agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
+  v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
+  coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
+             ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1), false) AS held,
+  EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
+  coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+             WHERE x.order_id = o.id), '{}') AS done_keys,
+  (SELECT count(*)::int FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+    WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given`
+
+const tables = `
+  FROM orders o
+  JOIN enclosures c ON c.id = o.enclosure_id
+  LEFT JOIN people w ON w.id = o.created_by
+  LEFT JOIN LATERAL (SELECT * FROM order_versions n WHERE n.order_id = o.id ORDER BY n.version_no DESC LIMIT 1) v ON true
+  LEFT JOIN people s ON s.id = v.signed_by
+  LEFT JOIN signed_texts t ON t.id = v.signed_text_id`
+
+export interface OrderFilter {
+  q?: string
+  enclosureCode?: string
+}
+
+/** Orders that match, unsorted and unpaged: where they stand is computed, so filter and sort follow in the query module. */
+export function readOrders(db: Db, filter: OrderFilter): Promise<OrderReadRow[]> {
+  const like = filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null
+  return db.query(
+    `SELECT ${columns} ${tables}
+      WHERE ($1::text IS NULL OR o.number ILIKE $1 OR c.code ILIKE $1 OR c.name ILIKE $1 OR v.agent ILIKE $1)
+        AND ($2::text IS NULL OR c.code = $2)
+      ORDER BY o.number DESC`,
+    [like, filter.enclosureCode ?? null],
+  )
+}
+
+export async function readOrder(db: Db, number: string): Promise<OrderReadRow | null> {
+  const [row]: OrderReadRow[] = await db.query(`SELECT ${columns} ${tables} WHERE o.number = $1`, [number])
+  return row ?? null
+}
+
+export interface VersionReadRow {
+  id: string
+  version_no: number
+  signed_text_id: string
+}
+
+export function readVersions(db: Db, orderId: string): Promise<VersionReadRow[]> {
+  return db.query(
+    `SELECT v.id, v.version_no, v.signed_text_id FROM order_versions v WHERE v.order_id = $1 ORDER BY v.version_no DESC`,
+    [orderId],
+  )
+}
+
+export interface EventReadRow {
+  id: string
+  kind: 'held' | 'hold-lifted' | 'discontinued'
+  reason: string | null
+  happened_at: Date
+  by_name: string | null
+}
+
+export function readEvents(db: Db, orderId: string): Promise<EventReadRow[]> {
+  return db.query(
+    `SELECT e.id, e.kind, e.reason, e.happened_at, p.printed_name AS by_name
+       FROM order_events e LEFT JOIN people p ON p.id = e.recorded_by
+      WHERE e.order_id = $1 ORDER BY e.happened_at DESC, e.recorded_at DESC`,
+    [orderId],
+  )
+}

@@ -1,0 +1,62 @@
+import { insertOnce, updateVersioned } from '../../platform/database/rows.ts'
+import type { Tx } from '../../platform/database/transactions.ts'
+import {
+  AgentExperience,
+  OrderEventRow,
+  OrderHead,
+  OrderVersion,
+  OrderVersionAnimal,
+} from './order.entity.ts'
+
+/** The head of an order, locked until the transaction ends; null when there is none. */
+export function lockOrder(tx: Tx, number: string): Promise<OrderHead | null> {
+  return tx.manager.findOne(OrderHead, { where: { number }, lock: { mode: 'pessimistic_write' } })
+}
+
+export function findOrderById(tx: Tx, id: string): Promise<OrderHead | null> {
+  return tx.manager.findOneBy(OrderHead, { id })
+}
+
+export async function insertOrder(tx: Tx, row: OrderHead): Promise<void> {
+  await tx.manager.insert(OrderHead, row)
+}
+
+export function saveOrder(
+  tx: Tx,
+  key: { id: string; version: number },
+  patch: Partial<OrderHead>,
+): Promise<void> {
+  return updateVersioned(tx, OrderHead, key, patch)
+}
+
+export async function insertVersion(
+  tx: Tx,
+  row: OrderVersion,
+  animals: readonly { animalId: string; taxonId: string }[],
+): Promise<void> {
+  await tx.manager.insert(OrderVersion, row)
+  await tx.manager.insert(
+    OrderVersionAnimal,
+    animals.map((animal) => ({ orderVersionId: row.id, ...animal })),
+  )
+}
+
+export async function newestVersion(tx: Tx, orderId: string): Promise<OrderVersion | null> {
+  return tx.manager.findOne(OrderVersion, { where: { orderId }, order: { versionNo: 'DESC' } })
+}
+
+export function insertEvent(tx: Tx, row: OrderEventRow): Promise<{ created: boolean }> {
+  return insertOnce(tx, OrderEventRow, row, ['orderId', 'kind', 'reason', 'happenedAt'])
+}
+
+/** Every event of an order, the oldest first. */
+export function eventsOf(tx: Tx, orderId: string): Promise<OrderEventRow[]> {
+  return tx.manager.find(OrderEventRow, {
+    where: { orderId },
+    order: { happenedAt: 'ASC', recordedAt: 'ASC' },
+  })
+}
+
+export async function insertExperience(tx: Tx, rows: readonly AgentExperience[]): Promise<void> {
+  if (rows.length > 0) await tx.manager.insert(AgentExperience, [...rows])
+}

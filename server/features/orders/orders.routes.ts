@@ -1,0 +1,57 @@
+import * as contracts from '../../../shared/contracts/orders.contract.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Route } from '../../platform/http/route.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import { readSituation } from './order-situation.ts'
+import type { SituationParts } from './order-situation.ts'
+import type { OrderQueries } from './orders.queries.ts'
+import type { OrdersService } from './orders.service.ts'
+import { presentPreview } from './preview-order.ts'
+
+export interface OrderRouteParts {
+  service: OrdersService
+  queries: OrderQueries
+  situation: SituationParts
+  now(): Date
+  /** The PDF of a signed version, and a note that it was printed. */
+  print(number: string, version: number | undefined, actor: Actor, requestId: string): Promise<Uint8Array>
+}
+
+export function orderRoutes({ service, queries, situation, now, print }: OrderRouteParts): Route[] {
+  return [
+    route(contracts.listOrders, ({ query }) => queries.list(query)),
+    route(contracts.getOrder, ({ params, context }) => queries.order(params.number, context.actor)),
+    route(contracts.previewOrder, async ({ body }) =>
+      presentPreview(body, await readSituation(situation, body, now())),
+    ),
+    route(contracts.draftOrder, async ({ body, context }) => {
+      const { number } = await service.draftOrder(context, body.id, body.fields)
+      return queries.order(number, context.actor)
+    }),
+    route(contracts.reviseDraft, async ({ params, body, context }) => {
+      await service.reviseDraft(context, params.number, body.expectedVersion, body.fields)
+      return queries.order(params.number, context.actor)
+    }),
+    route(contracts.signOrder, async ({ params, body, context }) => {
+      await service.signOrder(context, params.number, body)
+      return queries.order(params.number, context.actor)
+    }),
+    route(contracts.holdOrder, async ({ params, body, context }) => {
+      await service.holdOrder(context, params.number, body)
+      return queries.order(params.number, context.actor)
+    }),
+    route(contracts.liftOrderHold, async ({ params, body, context }) => {
+      await service.liftHold(context, params.number, body.reason)
+      return queries.order(params.number, context.actor)
+    }),
+    route(contracts.discontinueOrder, async ({ params, body, context }) => {
+      await service.discontinueOrder(context, params.number, body.reason)
+      return queries.order(params.number, context.actor)
+    }),
+    route(contracts.printOrder, async ({ params, query, context }) => ({
+      contentType: 'application/pdf',
+      fileName: `${params.number}.pdf`,
+      body: await print(params.number, query.version, context.actor, context.requestId),
+    })),
+  ]
+}

@@ -1,0 +1,73 @@
+import type { BathOrderFields, OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import { formatVolumeWithError } from '../../../shared/domain/quantities/format-volume-with-error.ts'
+import { formatVolume } from '../../../shared/domain/quantities/format-volume.ts'
+import { orderMissing, orderWords, volumeMethods } from '../../../shared/messages/orders.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
+import { isNumberRefusalCode, sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts'
+import type { AnimalFacts } from '../animals/index.ts'
+import type { WaterFacts } from '../water/index.ts'
+import { missingFields } from './order-situation.ts'
+import type { OrderSituation } from './order-situation.ts'
+import { saidAmount, saidCaution, saidCondition, saidLine } from './say-order.ts'
+
+/** How many animals, in words. */
+export function countText({ count }: AnimalFacts): string {
+  return count.basis === 'counted'
+    ? orderWords.animalsCounted({ count: count.ledger })
+    : orderWords.animalsEstimated({ low: count.low, high: count.high })
+}
+
+/** The connected water and everybody in it, in words. */
+export function saidWater(water: WaterFacts, animals: readonly AnimalFacts[], treated: readonly string[]) {
+  const { volume, volumeRefusal } = water
+  const usable = volume !== null && volumeRefusal === null
+  return {
+    enclosureCode: water.enclosureCode,
+    bodies: water.bodies.map((body) => body.code),
+    volumeText: !usable
+      ? null
+      : volume.errorPercent === null
+        ? formatVolume(volume.netVolumeLitres).text
+        : formatVolumeWithError(volume.netVolumeLitres, volume.errorPercent).text,
+    volumeNote: usable
+      ? orderWords.volumeByMethod({
+          method: volumeMethods[volume.method],
+          date: sayDate(volume.measuredOn),
+          by: '',
+        })
+      : orderWords.noVolume,
+    animals: animals.map((animal) => ({
+      animalId: animal.animalId,
+      accession: animal.accession,
+      commonName: animal.commonName,
+      scientificName: animal.scientificName,
+      countText: countText(animal),
+      enclosureCode: animal.enclosureCode ?? '',
+      treated: treated.includes(animal.animalId),
+    })),
+  }
+}
+
+/** Why there is no amount, and what to do about it. */
+function saidRefusal(found: OrderSituation): OrderPreview['refusal'] {
+  const refusal = found.judgement?.refusal
+  if (!refusal) return null
+  const { code, field = null } = refusal
+  const known = isNumberRefusalCode(code)
+  return { code, field, detail: known ? sayNumberRefusal({ ...refusal, code }) : orderWords.noVolume }
+}
+
+/** An order as it stands while it is being written. */
+export function presentPreview(fields: BathOrderFields, found: OrderSituation): OrderPreview {
+  const { situation, judgement } = found
+  const zone = situation.base.zone
+  return {
+    amount: judgement?.dose ? saidAmount(judgement.dose) : null,
+    refusal: saidRefusal(found),
+    working: judgement?.dose?.working.map(saidLine) ?? [],
+    water: saidWater(situation.water, situation.animals, fields.animalIds),
+    cautions: judgement?.answer.cautions.map((caution) => saidCaution(caution, zone)) ?? [],
+    conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, zone)) ?? [],
+    missing: missingFields(fields).map((field) => orderMissing[field]),
+  }
+}

@@ -1,0 +1,250 @@
+import { z } from 'zod'
+import { contract } from './contract.ts'
+import { OrderNumber } from './orders.contract.ts'
+import { EnteredQuantity, Instant, May, RecordId } from './primitives.ts'
+
+const DoseKey = z
+  .string()
+  .regex(/^\d{1,3}$/)
+  .describe('Which planned dose of the order: 1, 2 …')
+const doseParams = z.strictObject({ number: OrderNumber, key: DoseKey })
+
+const Caution = z.object({
+  ruleId: z.string().describe('Rule'),
+  code: z.string().describe('What it found'),
+  level: z.enum(['stop', 'warning', 'note']).describe('How grave it is'),
+  title: z.string().describe('In a few words'),
+  text: z.string().describe('In sentences'),
+  resolve: z.array(z.string()).describe('What would resolve it'),
+})
+
+const Calculation = z.object({
+  by: z.string().describe('Who worked it out'),
+  at: Instant,
+  lotNumber: z.string().nullable().describe('Lot it was worked out for'),
+  amountText: z.string().nullable().describe('The amount; withheld until the second calculation is stored'),
+})
+
+export const RecordedDose = z.object({
+  id: RecordId,
+  key: DoseKey,
+  kind: z
+    .enum(['given', 'recorded', 'withheld', 'refused'])
+    .describe('Given under the conditions, or recorded as a fact'),
+  amountText: z.string().nullable().describe('What was given'),
+  lotNumber: z.string().nullable().describe('Lot'),
+  happenedAt: Instant,
+  recordedAt: Instant.describe('When it was entered'),
+  by: z.string().describe('Who recorded it'),
+  note: z.string().nullable().describe('In words'),
+  exceptions: z.array(Caution).describe('What would have stopped or warned; for the veterinarian to review'),
+  twice: z.boolean().describe('Another record of the same planned dose exists'),
+  stop: z
+    .object({
+      at: Instant,
+      by: z.string().describe('Who stopped it'),
+      cause: z.enum(['time-up', 'stopped']).describe('At its time, or before it'),
+      seen: z.string().nullable().describe('What was seen'),
+      rescue: z.string().nullable().describe('What was done for the animals'),
+    })
+    .nullable()
+    .describe('The end of the bath, where it has ended'),
+})
+export type RecordedDose = z.infer<typeof RecordedDose>
+
+/** One planned dose as the person at the tank needs it, judged now. */
+export const BathSheet = z.object({
+  number: OrderNumber,
+  key: DoseKey,
+  dueAt: Instant.describe('When it is planned'),
+  doses: z.int().describe('Doses planned in all'),
+  state: z.enum(['due', 'running', 'done', 'held', 'ended', 'broken']).describe('Where this dose stands'),
+  enclosureCode: z.string().describe('Enclosure whose water is treated'),
+  enclosureName: z.string().describe('Its name'),
+  drug: z.string().describe('Established name of the drug'),
+  productName: z.string().describe('Product'),
+  lots: z
+    .array(
+      z.object({
+        id: RecordId,
+        lotNumber: z.string().describe('Lot number'),
+        state: z.string().describe('Whether it may be used'),
+      }),
+    )
+    .describe('Lots of the product'),
+  targetText: z.string().describe('Signed target with its basis'),
+  contactMinutes: z.number().nullable().describe('Contact time in minutes; null: left in the water'),
+  stopIf: z.string().describe('When the bath is stopped at once'),
+  instructions: z.string().describe('How it is given'),
+  blind: z.boolean().describe('Amounts are left out: for the person who calculates a second time'),
+  signedAmountText: z.string().nullable().describe('Amount as signed'),
+  amountNowText: z.string().nullable().describe('Amount by the water as it is now'),
+  amountNow: EnteredQuantity.nullable().describe('The same, as digits and unit'),
+  working: z
+    .array(
+      z.object({
+        label: z.string().describe('What the line works out'),
+        shown: z.string().describe('The arithmetic'),
+        result: z.string().describe('The answer'),
+      }),
+    )
+    .describe('Working by the water as it is now'),
+  driftPercent: z.number().nullable().describe('How far the volume has moved since the signature, percent'),
+  driftWithin: z.boolean().describe('Inside what the order allows'),
+  cautions: z.array(Caution).describe('What stops or warns now'),
+  steps: z
+    .array(
+      z.object({
+        ruleId: z.string().describe('Rule'),
+        text: z.string().describe('What has to be true before the first gram'),
+        state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands now'),
+        help: z.string().nullable().describe('What to do about it'),
+      }),
+    )
+    .describe('Conditions, judged now'),
+  secondNeeded: z.boolean().describe('A second calculation by another person is needed'),
+  first: Calculation.nullable().describe('First calculation for this dose'),
+  second: Calculation.extend({
+    agrees: z.boolean().describe('Agrees with the first'),
+    differencePercent: z.number().nullable().describe('Difference from the first, percent'),
+  })
+    .nullable()
+    .describe('Newest second calculation for this dose'),
+  mayStart: z.boolean().describe('Nothing stands in the way of giving it now'),
+  why: z.array(z.string()).describe('What stands in the way'),
+  recorded: z.array(RecordedDose).describe('Records of this dose'),
+  may: May,
+})
+export type BathSheet = z.infer<typeof BathSheet>
+
+export const getBathSheet = contract({
+  id: 'getBathSheet',
+  method: 'get',
+  path: '/orders/:number/doses/:key',
+  action: 'dose.record',
+  summary: 'One planned dose, judged now: conditions, amounts, calculations, records',
+  params: doseParams,
+  query: z.strictObject({ blind: z.enum(['yes']).optional().describe('Leave every amount out') }),
+  reply: { 200: BathSheet },
+  problems: ['not-found'],
+})
+
+export const calculateFirst = contract({
+  id: 'calculateFirst',
+  method: 'post',
+  path: '/orders/:number/doses/:key/first-calculation',
+  action: 'dose.give',
+  summary: 'Work the amount out for the water as it is now and a lot in the hand',
+  params: doseParams,
+  body: z.strictObject({ id: RecordId, lotId: RecordId.describe('Lot in the hand') }),
+  reply: { 201: BathSheet },
+  problems: ['not-found', 'id-already-used', 'dose-not-possible'],
+  idempotent: 'by-record-id',
+})
+
+export const calculateSecond = contract({
+  id: 'calculateSecond',
+  method: 'post',
+  path: '/orders/:number/doses/:key/second-calculation',
+  action: 'dose.calculate-second',
+  summary: 'A blind second calculation by another person, from label, mark and container',
+  params: doseParams,
+  body: z.strictObject({
+    id: RecordId,
+    enclosureRead: z.string().trim().min(1).max(60).describe('Enclosure as read from its label'),
+    markRead: z.string().trim().min(1).max(120).describe('Depth or fill mark as seen'),
+    lotRead: z.string().trim().min(1).max(60).describe('Lot as read from the container'),
+    strengthRead: EnteredQuantity.describe('Strength as read from the container'),
+    amount: EnteredQuantity.describe('Amount as worked out by the second person'),
+  }),
+  reply: { 201: BathSheet },
+  problems: ['not-found', 'id-already-used', 'another-person-needed', 'first-calculation-missing'],
+  idempotent: 'by-record-id',
+})
+
+export const giveDose = contract({
+  id: 'giveDose',
+  method: 'post',
+  path: '/orders/:number/doses/:key/give',
+  action: 'dose.give',
+  summary: 'Give a dose: judged now, refused while something stands in the way',
+  params: doseParams,
+  body: z.strictObject({
+    id: RecordId,
+    lotId: RecordId.describe('Lot in the hand'),
+    amount: EnteredQuantity.describe('Amount weighed or measured'),
+    note: z.string().trim().max(1000).optional().describe('In words'),
+  }),
+  reply: { 201: BathSheet },
+  problems: ['not-found', 'id-already-used', 'dose-not-possible', 'broken-record'],
+  idempotent: 'by-record-id',
+})
+
+export const recordDose = contract({
+  id: 'recordDose',
+  method: 'post',
+  path: '/orders/:number/doses/:key/record',
+  action: 'dose.record',
+  summary: 'Record what happened, with its own time; never refused for its content',
+  params: doseParams,
+  body: z.strictObject({
+    id: RecordId,
+    kind: z.enum(['recorded', 'withheld', 'refused']).describe('Given, withheld, or refused by the animal'),
+    happenedAt: Instant,
+    amount: EnteredQuantity.nullable().describe('What was given; null where nothing was'),
+    lotId: RecordId.nullable().describe('Lot, where known'),
+    note: z.string().trim().max(1000).optional().describe('In words'),
+  }),
+  reply: { 201: BathSheet },
+  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  idempotent: 'by-record-id',
+})
+
+export const stopBath = contract({
+  id: 'stopBath',
+  method: 'post',
+  path: '/doses/:doseId/stop',
+  action: 'bath.stop',
+  summary: 'End a bath, at its time or at once; never refused',
+  params: z.strictObject({ doseId: RecordId }),
+  body: z.strictObject({
+    id: RecordId,
+    cause: z.enum(['time-up', 'stopped']).describe('At its time, or before it'),
+    happenedAt: Instant,
+    seen: z.string().trim().max(1000).optional().describe('What was seen'),
+    rescue: z.string().trim().max(1000).optional().describe('Flush, air, clean water'),
+  }),
+  reply: { 201: BathSheet },
+  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  idempotent: 'by-record-id',
+})
+
+export const listDueDoses = contract({
+  id: 'listDueDoses',
+  method: 'get',
+  path: '/due-doses',
+  action: 'dose.record',
+  summary: 'Planned doses due or late, and baths running now, in time order',
+  query: z.strictObject({
+    until: Instant.optional().describe('Doses planned until then; 24 h from now unless told'),
+  }),
+  reply: {
+    200: z.object({
+      rows: z
+        .array(
+          z.object({
+            number: OrderNumber,
+            key: DoseKey,
+            dueAt: Instant,
+            latestAt: Instant.describe('End of its window'),
+            enclosureCode: z.string().describe('Enclosure'),
+            drug: z.string().describe('Drug'),
+            amountText: z.string().nullable().describe('Signed amount'),
+            state: z.enum(['due', 'late', 'running', 'held']).describe('Where it stands'),
+          }),
+        )
+        .describe('Doses'),
+    }),
+  },
+  problems: [],
+})

@@ -1,0 +1,363 @@
+import { z } from 'zod'
+import { agentCodes } from '../domain/formulary/agent.ts'
+import { concentrationBases } from '../domain/units/basis.ts'
+import { contract } from './contract.ts'
+import { EnteredQuantity, Instant, listQuery, May, page, Reason, RecordId, Version } from './primitives.ts'
+import { SignatureBlock } from './signing.contract.ts'
+
+export const OrderNumber = z
+  .string()
+  .regex(/^[A-Z]+-\d+$/)
+  .describe('Number of the order, for example TO-0734')
+const Basis = z.enum(concentrationBases).describe('What the figure is a concentration of')
+
+/** What a form can state that no ledger holds yet. Nothing is chosen beforehand. */
+export const Stated = z
+  .strictObject({
+    waterKind: z
+      .enum(['fresh', 'brackish', 'marine'])
+      .nullable()
+      .describe('Kind of water, where no salinity was read'),
+    oxygenIsLogged: z.boolean().nullable().describe('Oxygen is logged continuously'),
+    hasBloom: z.boolean().nullable().describe('There is a heavy bloom of algae'),
+    hasPlantsOrAlgae: z.boolean().nullable().describe('Plants or algae are on show in this water'),
+    lights: z.enum(['full', 'dimmed', 'off']).nullable().describe('Lights over the water'),
+    experienceWith: z
+      .array(z.string().max(200))
+      .max(50)
+      .describe('Taxa for which the veterinarian declares earlier experience with this drug here'),
+  })
+  .describe('Facts that no ledger holds, stated on the form')
+
+/** An order for an immersion bath as it is being written; choices that attest are null until somebody makes them. */
+export const BathOrderFields = z
+  .strictObject({
+    enclosureId: RecordId.describe('Enclosure whose water is treated'),
+    animalIds: z.array(RecordId).max(200).describe('Animals and groups that are treated'),
+    productId: RecordId.nullable().describe('Product'),
+    lotId: RecordId.nullable().describe('Lot, where one is chosen already'),
+    doseLineId: RecordId.nullable().describe('Dose line of the formulary that the target is taken from'),
+    problem: z.string().trim().max(500).describe('Condition treated'),
+    use: z.enum(['as-labelled', 'extralabel']).nullable().describe('Use by the label, or outside it'),
+    target: EnteredQuantity.nullable().describe('What is wanted in the water'),
+    basis: Basis.nullable().describe('What the target is a concentration of'),
+    timing: z.enum(['timed', 'indefinite']).nullable().describe('For a time, or left in the water'),
+    contactMinutes: z.number().positive().max(20_160).nullable().describe('Contact time in minutes'),
+    doses: z.int().min(1).max(60).describe('Number of doses'),
+    intervalHours: z
+      .number()
+      .positive()
+      .max(2160)
+      .nullable()
+      .describe('Hours between doses; null for a single one'),
+    startsAt: Instant.nullable().describe('First dose'),
+    setting: z.enum(['tank', 'raceway', 'pond']).nullable().describe('Where the water is'),
+    division: EnteredQuantity.nullable().describe('Smallest step of the balance or measure'),
+    stopIf: z.string().trim().max(1000).describe('When the bath is stopped at once'),
+    instructions: z.string().trim().max(2000).describe('How it is given'),
+    allowedVolumeDriftPercent: z
+      .number()
+      .min(0)
+      .max(50)
+      .describe('How far the volume may have moved since the signature, in percent'),
+    stated: Stated,
+  })
+  .describe('An order for a bath')
+export type BathOrderFields = z.infer<typeof BathOrderFields>
+
+const Line = z.object({
+  key: z.string().describe('Names the line within its working'),
+  label: z.string().describe('What the line works out, in words'),
+  expression: z.string().describe('The arithmetic with its numbers and units'),
+  shown: z.string().describe('The arithmetic as a person reads it'),
+  value: z.number().describe('The unrounded answer, in the unit beside it'),
+  unit: z.string().describe('Unit of the answer'),
+  result: z.string().describe('The answer as shown'),
+})
+
+const SaidCaution = z.object({
+  ruleId: z.string().describe('Rule that fired'),
+  code: z.string().describe('What it found'),
+  level: z.enum(['stop', 'warning', 'note']).describe('How grave it is'),
+  overridable: z.boolean().describe('A veterinarian may override it with a signed reason'),
+  title: z.string().describe('The caution in a few words'),
+  text: z.string().describe('The caution in sentences'),
+  resolve: z.array(z.string()).describe('What would resolve it'),
+  citations: z.array(z.string()).describe('What it rests on, with marks'),
+  secondCalculation: z.boolean().describe('It asks for a second calculation'),
+})
+export type SaidCaution = z.infer<typeof SaidCaution>
+
+const SaidCondition = z.object({
+  ruleId: z.string().describe('Rule that is judged at the dose'),
+  level: z.enum(['stop', 'warning', 'note']).describe('How grave it is when it is not met'),
+  text: z.string().describe('What has to be true before the first gram'),
+  state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands by the facts at hand'),
+  secondCalculation: z.boolean().describe('It asks for a second calculation'),
+})
+
+export const OrderAmount = z.object({
+  unrounded: z.number().describe('Amount as worked out, in g or mL as the unit says'),
+  unroundedUnit: z.enum(['g', 'mL']).describe('Unit of the unrounded amount'),
+  measured: EnteredQuantity.nullable().describe(
+    'What is weighed or measured; null without a balance or measure',
+  ),
+  text: z.string().describe('The amount as it is written'),
+  rangeText: z.string().nullable().describe('What the error of the volume makes of it'),
+})
+
+export const OrderWater = z.object({
+  enclosureCode: z.string().describe('Enclosure'),
+  bodies: z.array(z.string()).describe('Connected water now'),
+  volumeText: z.string().nullable().describe('Net volume to its error'),
+  volumeNote: z.string().nullable().describe('Why there is no usable volume, or how it was determined'),
+  animals: z
+    .array(
+      z.object({
+        animalId: RecordId,
+        accession: z.string().describe('Accession number'),
+        commonName: z.string().describe('Common name'),
+        scientificName: z.string().describe('Scientific name'),
+        countText: z.string().describe('How many'),
+        enclosureCode: z.string().describe('Where it is held'),
+        treated: z.boolean().describe('Named on the order'),
+      }),
+    )
+    .describe('Everybody in the connected water'),
+})
+
+export const OrderPreview = z.object({
+  amount: OrderAmount.nullable().describe('The amount; null while it cannot be worked out'),
+  refusal: z
+    .object({
+      field: z.string().nullable().describe('Field at fault'),
+      code: z.string().describe('Stable code'),
+      detail: z.string().describe('What to do'),
+    })
+    .nullable()
+    .describe('Why there is no amount'),
+  working: z.array(Line).describe('Working of the amount'),
+  water: OrderWater.describe('Connected water and everybody in it'),
+  cautions: z.array(SaidCaution).describe('Cautions, the gravest first'),
+  conditions: z.array(SaidCondition).describe('What has to be true before each dose'),
+  missing: z.array(z.string()).describe('Fields that have to be filled before signing'),
+})
+export type OrderPreview = z.infer<typeof OrderPreview>
+
+export const orderPhases = [
+  'draft',
+  'proposed',
+  'not-started',
+  'in-progress',
+  'held',
+  'completed',
+  'expired',
+  'discontinued',
+] as const
+
+export const OrderRow = z.object({
+  id: RecordId,
+  number: OrderNumber,
+  phase: z.enum(orderPhases).describe('Where the order stands'),
+  enclosureCode: z.string().describe('Enclosure'),
+  enclosureName: z.string().describe('Name of the enclosure'),
+  agent: z.enum(agentCodes).nullable().describe('Drug; null while none is chosen'),
+  problem: z.string().describe('Condition treated'),
+  amountText: z.string().nullable().describe('Signed amount'),
+  targetText: z.string().nullable().describe('Signed target'),
+  startsAt: Instant.nullable().describe('First dose'),
+  signedBy: z.string().nullable().describe('Signer'),
+  signedAt: Instant.nullable().describe('When it was signed'),
+  versionNo: z.int().nullable().describe('Signed version in force'),
+  dosesGiven: z.int().describe('Doses given'),
+  doses: z.int().nullable().describe('Doses planned'),
+  nextDueAt: Instant.nullable().describe('Next planned dose'),
+})
+export type OrderRow = z.infer<typeof OrderRow>
+
+const OrderEvent = z.object({
+  id: RecordId,
+  kind: z.enum(['held', 'hold-lifted', 'discontinued']).describe('What happened'),
+  reason: z.string().nullable().describe('Why, where somebody said so'),
+  happenedAt: Instant,
+  by: z.string().describe('Who did it'),
+})
+
+export const SignedVersion = z.object({
+  versionNo: z.int().describe('Version'),
+  signature: SignatureBlock.describe('Who signed it, and whether the text is still what was signed'),
+  content: z.unknown().describe('Everything that was signed, as it was signed'),
+  superseded: z.boolean().describe('A later version is in force'),
+})
+
+export const Order = OrderRow.extend({
+  version: z.int().describe('Version for saving the draft'),
+  draft: BathOrderFields.nullable().describe('The draft, where there is one'),
+  createdBy: z.string().describe('Who wrote it first'),
+  createdAt: Instant.describe('When it was written first'),
+  versions: z.array(SignedVersion).describe('Signed versions, the newest first'),
+  events: z.array(OrderEvent).describe('Holds and ends, the newest first'),
+  may: May,
+})
+export type Order = z.infer<typeof Order>
+
+const orderParams = z.strictObject({ number: OrderNumber })
+
+export const listOrders = contract({
+  id: 'listOrders',
+  method: 'get',
+  path: '/orders',
+  action: 'order.read',
+  summary: 'Treatment orders',
+  query: listQuery(['number', 'startsAt', 'enclosure', 'signedAt']).extend({
+    phase: z
+      .enum([...orderPhases, 'open'])
+      .optional()
+      .describe('Only orders that stand here; open: not ended'),
+    enclosureCode: z.string().max(40).optional().describe('Only orders for this enclosure'),
+  }),
+  reply: { 200: page(OrderRow) },
+  problems: [],
+})
+
+export const getOrder = contract({
+  id: 'getOrder',
+  method: 'get',
+  path: '/orders/:number',
+  action: 'order.read',
+  summary: 'One order with its signed versions, each checked now',
+  params: orderParams,
+  reply: { 200: Order },
+  problems: ['not-found'],
+})
+
+export const previewOrder = contract({
+  id: 'previewOrder',
+  method: 'post',
+  path: '/order-previews',
+  action: 'order.draft',
+  summary: 'Work out an order and judge it, without keeping anything',
+  body: BathOrderFields,
+  reply: { 200: OrderPreview },
+  problems: ['not-found'],
+  idempotent: 'nothing-kept',
+})
+
+export const draftOrder = contract({
+  id: 'draftOrder',
+  method: 'post',
+  path: '/orders',
+  action: 'order.draft',
+  summary: 'Keep a new draft; a technician’s is a proposal',
+  body: z.strictObject({ id: RecordId, fields: BathOrderFields }),
+  reply: { 201: Order },
+  problems: ['not-found', 'id-already-used'],
+  idempotent: 'by-record-id',
+})
+
+export const reviseDraft = contract({
+  id: 'reviseDraft',
+  method: 'put',
+  path: '/orders/:number/draft',
+  action: 'order.draft',
+  summary: 'Save the draft again, or begin an amended version of a signed order',
+  params: orderParams,
+  body: z.strictObject({ expectedVersion: Version, fields: BathOrderFields }),
+  reply: { 200: Order },
+  problems: ['not-found', 'stale-version', 'order-ended'],
+})
+
+export const signOrder = contract({
+  id: 'signOrder',
+  method: 'post',
+  path: '/orders/:number/signature',
+  action: 'order.sign',
+  summary: 'Sign the draft: recomputed, judged again, frozen',
+  params: orderParams,
+  body: z.strictObject({
+    password: z.string().min(1).max(200).describe('The signer’s password'),
+    expectedVersion: Version,
+    read: z.array(z.string().max(20)).max(60).describe('Rules whose warnings the signer has read'),
+    overrides: z
+      .array(
+        z.strictObject({
+          ruleId: z.string().max(20).describe('Rule that is overridden'),
+          reason: Reason,
+        }),
+      )
+      .max(30)
+      .describe('Stops that are overridden, each with its reason'),
+  }),
+  reply: { 201: Order },
+  problems: [
+    'not-found',
+    'stale-version',
+    'licence-not-valid',
+    'password-wrong',
+    'sign-in-locked',
+    'order-incomplete',
+    'caution-stops',
+    'cautions-unread',
+    'working-disagrees',
+    'nothing-to-sign',
+  ],
+  idempotent: 'by-key',
+})
+
+export const holdOrder = contract({
+  id: 'holdOrder',
+  method: 'post',
+  path: '/orders/:number/holds',
+  action: 'order.hold',
+  summary: 'Hold an order at once; needs no password and no reason',
+  params: orderParams,
+  body: z.strictObject({
+    id: RecordId,
+    happenedAt: Instant,
+    reason: z.string().trim().max(2000).optional().describe('Why, where there is time to say so'),
+  }),
+  reply: { 201: Order },
+  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  idempotent: 'by-record-id',
+})
+
+export const liftOrderHold = contract({
+  id: 'liftOrderHold',
+  method: 'post',
+  path: '/orders/:number/hold-lift',
+  action: 'hold.lift',
+  summary: 'Lift the hold of an order; for a veterinarian',
+  params: orderParams,
+  body: z.strictObject({ reason: Reason }),
+  reply: { 200: Order },
+  problems: ['not-found', 'not-held'],
+  idempotent: 'by-key',
+})
+
+export const discontinueOrder = contract({
+  id: 'discontinueOrder',
+  method: 'post',
+  path: '/orders/:number/discontinuation',
+  action: 'order.discontinue',
+  summary: 'End an order before its time; for a veterinarian',
+  params: orderParams,
+  body: z.strictObject({ reason: Reason }),
+  reply: { 200: Order },
+  problems: ['not-found', 'order-ended'],
+  idempotent: 'by-key',
+})
+
+export const printOrder = contract({
+  id: 'printOrder',
+  method: 'get',
+  path: '/orders/:number/print',
+  action: 'order.print',
+  summary: 'The signed order as PDF, checked now',
+  params: orderParams,
+  query: z.strictObject({
+    version: z.coerce.number().int().min(1).optional().describe('Version; the newest unless told'),
+  }),
+  reply: { 200: z.string().describe('PDF') },
+  problems: ['not-found'],
+  produces: 'pdf',
+})

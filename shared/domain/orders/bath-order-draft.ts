@@ -1,0 +1,42 @@
+import type { AgentCode } from '../formulary/agent.ts'
+import type { BathProduct } from '../dose/bath-product.ts'
+import type { DefaultRange } from '../cautions/caution-facts.ts'
+import type { FacilityDate, Instant } from '../time/instant.ts'
+import type { ConcentrationBasis } from '../units/basis.ts'
+import type { Quantity } from '../units/quantity.ts'
+
+/** What a veterinarian writes on an order for an immersion bath; everything is as entered. */
+export interface BathOrderDraft {
+  target: { concentration: Quantity; basis: ConcentrationBasis | null }
+  timing: 'timed' | 'indefinite' | null
+  /** Of one treatment; null when it stays in the water. */
+  contactMinutes: number | null
+  doses: number
+  /** Hours between doses; null for a single one. */
+  intervalHours: number | null
+  startsAt: Instant | null
+  setting: 'tank' | 'raceway' | 'pond' | null
+  /** The step of the balance or measure. */
+  division: Quantity
+  /** What only a person knows; empty until somebody says so. */
+  stated: StatedFacts
+}
+
+/** Facts no ledger holds yet: stated on the form, by name, and printed with the order. */
+export interface StatedFacts {
+  waterKind: 'fresh' | 'brackish' | 'marine' | null
+  oxygenIsLogged: boolean | null
+  hasBloom: boolean | null
+  hasPlantsOrAlgae: boolean | null
+  lights: 'full' | 'dimmed' | 'off' | null
+  /** Taxa for which a veterinarian declares earlier experience with the agent here. */
+  experienceWith: readonly string[]
+}
+
+/** The product chosen, with the lot if one is chosen and the dose line it is ordered by. */
+export interface ChosenProduct {
+  agent: AgentCode
+  product: BathProduct
+  lot: { expiresOn: FacilityDate; state: string } | null
+  line: (DefaultRange & { longestContactMinutes: number | null }) | null
+}

@@ -1,0 +1,130 @@
+import type { CautionFacts } from '../cautions/caution-facts.ts'
+import { known, notApplicable, unknown } from '../cautions/fact.ts'
+import type { Fact } from '../cautions/fact.ts'
+import type { BathDose } from '../dose/bath-dose.ts'
+import { addHours } from '../time/instant-arithmetic.ts'
+import { parseQuantity } from '../units/parse-quantity.ts'
+import { findUnit } from '../units/find-unit.ts'
+import { unitOf } from '../units/unit-of.ts'
+import type { ConcentrationUnit } from '../cautions/caution-facts.ts'
+import type { BathOrderDraft, ChosenProduct } from './bath-order-draft.ts'
+
+/** The facts of the water and its animals, as the server assembled them; order and lot are still to be put in. */
+export type BathFacts = Omit<CautionFacts, 'order' | 'lot' | 'agent'>
+
+const orUnknown = <T>(value: T | null, source: string): Fact<T> =>
+  value === null ? unknown() : known(value, null, source)
+
+const stated = 'stated on the order'
+
+function targetFact({ target }: BathOrderDraft): CautionFacts['order']['target'] {
+  const unit = findUnit(target.concentration.unit, {})
+  if (!unit.ok) return unknown()
+  const { dimension } = unitOf(unit.value)
+  if (dimension !== 'massConcentration' && dimension !== 'volumeConcentration') return unknown()
+  const parsed = parseQuantity(target.concentration, { dimension, above: 0 })
+  if (!parsed.ok) return unknown()
+  const value = Number(parsed.value.entered.value)
+  return known({ value, unit: unit.value as ConcentrationUnit, basis: target.basis }, null, 'the order')
+}
+
+const storageFaults = ['stored-cold', 'precipitate']
+
+function lotFacts(chosen: ChosenProduct): CautionFacts['lot'] {
+  const { lot, product } = chosen
+  const density =
+    product.density === undefined ? null : parseQuantity(product.density, { dimension: 'density', above: 0 })
+  const lotStatus = (state: string) =>
+    state === 'recalled' ? 'recalled' : state === 'set-aside' ? 'quarantined' : 'usable'
+  return {
+    expiresOn: lot ? known(lot.expiresOn, null, 'the lot') : unknown(),
+    beyondUseOn: notApplicable(),
+    status: lot ? known(lotStatus(lot.state), null, 'the lot') : unknown(),
+    storageFault: lot ? known(storageFaults.includes(lot.state), null, 'the lot') : unknown(),
+    densityGPerMl: density?.ok ? known(density.value.value, null, 'the label') : notApplicable(),
+  }
+}
+
+/**
+ * Puts an order, its product and the worked-out amount into the facts of the water, so that the caution rules can be
+ * asked. What the form states overrides nothing that a ledger knows.
+ *
+ * @param dose the amount, or null while it cannot be worked out: rules on amounts then see it as unknown
+ */
+export function orderFacts(
+  base: BathFacts,
+  draft: BathOrderDraft,
+  chosen: ChosenProduct,
+  dose: BathDose | null,
+): CautionFacts {
+  const minutes = draft.timing === 'indefinite' ? null : draft.contactMinutes
+  const dosesPerDay = draft.intervalHours !== null && draft.intervalHours < 24 ? 24 / draft.intervalHours : 1
+  const hours = draft.intervalHours === null ? 0 : draft.intervalHours * (draft.doses - 1)
+  const endsAt =
+    draft.startsAt === null || draft.timing === 'indefinite'
+      ? null
+      : addHours(draft.startsAt, hours + (draft.contactMinutes ?? 0) / 60)
+  const { stated: said } = draft
+  const fill = <T>(fact: Fact<T>, value: T | null): Fact<T> =>
+    fact.state === 'unknown' && value !== null ? known(value, null, stated) : fact
+  const experience: Fact<readonly string[]> =
+    base.animals.withoutExperience.state === 'known'
+      ? {
+          ...base.animals.withoutExperience,
+          value: base.animals.withoutExperience.value.filter((taxon) => !said.experienceWith.includes(taxon)),
+        }
+      : base.animals.withoutExperience
+  return {
+    ...base,
+    agent: chosen.agent,
+    order: {
+      target: targetFact(draft),
+      timing: orUnknown(draft.timing, 'the order'),
+      contactMinutes: draft.timing === 'indefinite' ? notApplicable() : orUnknown(minutes, 'the order'),
+      contactMinutesPerDay:
+        draft.timing === 'indefinite'
+          ? notApplicable()
+          : orUnknown(minutes === null ? null : minutes * dosesPerDay, 'the order'),
+      setting: orUnknown(draft.setting, 'the order'),
+      startsAt: orUnknown(draft.startsAt, 'the order'),
+      endsAt: orUnknown(endsAt, 'the order'),
+      defaultRange: chosen.line ? known(chosen.line, null, 'the formulary') : unknown(),
+      amountGrams: amountFact(dose, 'g'),
+      amountMillilitres: amountFact(dose, 'mL'),
+      amountShareOfPlan: known(1, null, 'the order'),
+      isTopUpInsideLimits: known(false, null, 'the order'),
+      dosesGiven: known(0, null, 'the order'),
+      changedSinceLastCalculation: known(false, null, 'the order'),
+      copperCourse: notApplicable(),
+      spacing:
+        draft.intervalHours === null
+          ? notApplicable()
+          : known(
+              {
+                intervalHours: draft.intervalHours,
+                lastGivenAt: null,
+                givenDoses: 0,
+                plannedDoses: draft.doses,
+                readingDriven: false,
+              },
+              null,
+              'the order',
+            ),
+    },
+    lot: lotFacts(chosen),
+    water: {
+      ...base.water,
+      kind: fill(base.water.kind, said.waterKind),
+      oxygenIsLogged: fill(base.water.oxygenIsLogged, said.oxygenIsLogged),
+      hasBloom: fill(base.water.hasBloom, said.hasBloom),
+      hasPlantsOrAlgae: fill(base.water.hasPlantsOrAlgae, said.hasPlantsOrAlgae),
+    },
+    lifeSupport: { ...base.lifeSupport, lights: fill(base.lifeSupport.lights, said.lights) },
+    animals: { ...base.animals, withoutExperience: experience },
+  }
+}
+
+function amountFact(dose: BathDose | null, unit: 'g' | 'mL'): Fact<number> {
+  if (!dose) return unknown()
+  return dose.unit === unit ? known(dose.amount, null, 'the working') : notApplicable()
+}

@@ -1,0 +1,31 @@
+import { compareInstants } from '../time/instant-arithmetic.ts'
+import type { Instant } from '../time/instant.ts'
+import type { PlannedDose } from './planned-doses.ts'
+
+export type OrderPhase =
+  'draft' | 'proposed' | 'not-started' | 'in-progress' | 'held' | 'completed' | 'expired' | 'discontinued'
+
+export interface OrderStanding {
+  stage: 'draft' | 'proposed' | 'none'
+  /** The signed version in force; null when none was signed. */
+  signed: { planned: readonly PlannedDose[]; doneKeys: readonly string[]; lastWindowUntil: Instant } | null
+  held: boolean
+  ended: boolean
+}
+
+/**
+ * Where an order stands, computed and never stored. A signed order with a newer draft stands where its signed version
+ * stands.
+ *
+ * @param doneKeys        planned doses given, recorded, withheld or refused
+ * @param lastWindowUntil end of the window of the last planned dose: past it, an order not carried out has expired
+ */
+export function orderPhase(standing: OrderStanding, now: Instant): OrderPhase {
+  const { signed } = standing
+  if (standing.ended) return 'discontinued'
+  if (!signed) return standing.stage === 'proposed' ? 'proposed' : 'draft'
+  if (signed.planned.every((dose) => signed.doneKeys.includes(dose.key))) return 'completed'
+  if (standing.held) return 'held'
+  if (compareInstants(now, signed.lastWindowUntil) > 0) return 'expired'
+  return signed.doneKeys.length > 0 ? 'in-progress' : 'not-started'
+}

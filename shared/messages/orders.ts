@@ -1,0 +1,104 @@
+import { counted, defineMessages } from './define-messages.ts'
+
+/** Words of treatment orders, on screen and on paper. */
+export const orderWords = defineMessages({
+  order: 'Treatment order: bath',
+  meaningAuthor: 'author of this order',
+  between: 'to',
+  animalsCounted: (p: { count: number }) => counted(p.count, 'animal', 'animals'),
+  animalsEstimated: (p: { low: number; high: number }) => `estimated ${String(p.low)} to ${String(p.high)}`,
+  noVolume: 'There is no volume to dose by.',
+  volumeByMethod: (p: { method: string; date: string; by: string }) => `${p.method}, ${p.date}${p.by}`,
+})
+
+/** What a signed order still lacks, by field. */
+export const orderMissing = defineMessages({
+  animalIds: 'Choose the animals that are treated.',
+  productId: 'Choose the product.',
+  problem: 'Type the condition that is treated.',
+  use: 'Choose as labelled or extralabel.',
+  target: 'Type what is wanted in the water, with its unit.',
+  basis: 'Choose what the target is of.',
+  timing: 'Choose for a time, or left in the water.',
+  contactMinutes: 'Type the contact time in minutes.',
+  intervalHours: 'Type the hours between doses.',
+  startsAt: 'Choose when the first dose is given.',
+  setting: 'Choose tank, raceway or pond.',
+  division: 'Type the smallest step of the balance or measure.',
+  stopIf: 'Type when the bath is stopped at once.',
+})
+export type OrderField = keyof typeof orderMissing
+
+export const volumeMethods = defineMessages({
+  geometry: 'worked out from measurements',
+  metered: 'metered',
+  dilution: 'by dilution',
+  estimated: 'estimated',
+})
+
+/** Words of the printed order. */
+export const orderPaper = defineMessages({
+  source: 'Volumes in litres. Amounts in grams or millilitres of product.',
+  sourceMicrolitres: 'Volumes in litres. µL/L means microlitres of product per litre of water.',
+  into: ', into the water',
+  lot: (p: { lot: string; expires: string }) => `, lot ${p.lot}, use by ${p.expires}`,
+  noLot: ', lot to be written down at the dose',
+  strength: (p: { strength: string; basis: string }) => `${p.strength}, ${p.basis}`,
+  range: (p: { range: string }) => `Range from the error of the volume: ${p.range}.`,
+  problem: 'Problem',
+  target: 'Target',
+  doseLine: 'Formulary',
+  contact: 'Contact',
+  contactTimed: (p: { minutes: string }) => p.minutes,
+  contactIndefinite: 'left in the water',
+  doses: 'Doses',
+  dosesText: (p: { doses: number; hours: number | null }) =>
+    p.hours === null
+      ? counted(p.doses, 'dose', 'doses')
+      : `${counted(p.doses, 'dose', 'doses')}, every ${String(p.hours)} h`,
+  start: 'First dose',
+  use: 'Use',
+  asLabelled: 'as labelled',
+  extralabel: 'extralabel',
+  how: 'How',
+  water: 'Connected water',
+  waterText: (p: { bodies: string; valves: string }) =>
+    p.valves === '' ? p.bodies : `${p.bodies}. ${p.valves}`,
+  valve: (p: { code: string; state: string }) => `${p.code} ${p.state}`,
+  volumeHeading: (p: { volume: string; note: string }) => `Net volume: ${p.volume}, ${p.note}`,
+  workingHeading: 'Amount for each dose',
+  conditionsHeading: 'Before each dose, true before the first gram',
+  cautionsHeading: 'Cautions',
+  noCautions: 'No caution fired at signing.',
+  overridden: (p: { name: string }) => `Overridden by ${p.name},`,
+  reason: (p: { reason: string }) => ` reason: ${p.reason}`,
+  animalsHeading: 'Animals',
+  accession: 'Number',
+  animal: 'Animal',
+  count: 'How many',
+  place: 'Enclosure',
+  treated: 'Treated',
+  yes: 'treated',
+  shares: 'shares the water',
+  noAnimals: 'Nobody is in this water.',
+  givenHeading: 'Given',
+  dose: 'Dose',
+  due: 'Due',
+  second: 'Second calculation',
+  measured: 'Weighed or measured',
+  started: 'Started',
+  ended: 'Ended',
+  by: 'Given by',
+  role: 'veterinarian',
+  licence: (p: { number: string; until: string }) => `licence ${p.number}, valid to ${p.until}`,
+  meaning: (p: { meaning: string }) => `Signed as ${p.meaning}`,
+  signedBy: (p: { name: string; at: string }) => `Signed by ${p.name}, ${p.at}`,
+  version: (p: { n: number }) => `version ${String(p.n)}`,
+  title: (p: { number: string; n: number }) => `Treatment order ${p.number}, version ${String(p.n)}`,
+  unknownKey: 'Signed with a key that this installation does not know',
+  fingerprint: 'Record check in full',
+  broken: 'Record check failed: this is not the text that was signed. Do not act on this page.',
+  completed: 'All doses are recorded. Do not dose from this page.',
+  discontinued: 'Discontinued. Do not dose from this page.',
+  expired: 'Expired. Do not dose from this page.',
+})

@@ -1,0 +1,154 @@
+import type { BathOrderFields } from '../../shared/contracts/orders.contract.ts'
+import { newKey, password } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
+import { aGroup, aTaxon } from './a-collection.ts'
+import { anEnclosure, aTankAndSumpSheet, aValve, aWaterBody } from './a-water.ts'
+import type { BuiltEnclosure } from './a-water.ts'
+
+/** A tank with its sump, its volume determined and confirmed: 2,181.4 L net, ± 2 %. */
+export async function aBathWater(api: TestApi, code: string): Promise<BuiltEnclosure & { sumpId: string }> {
+  const tank = await anEnclosure(api, code)
+  const sumpId = await aWaterBody(api, `S-${code}`)
+  await aValve(api, `V-${code}`, [tank.waterBodyId, sumpId])
+  const id = api.nextId()
+  await (
+    await api.as('technician')
+  ).agent
+    .post(`/api/enclosures/${code}/volumes`)
+    .send({
+      id,
+      happenedAt: '2026-11-30T14:00:00Z',
+      waterBodyIds: [tank.waterBodyId, sumpId],
+      sheet: aTankAndSumpSheet,
+    })
+    .expect(201)
+  await (
+    await api.as('veterinarian')
+  ).agent
+    .post(`/api/volumes/${id}/confirmation`)
+    .set('Idempotency-Key', newKey())
+    .send({})
+    .expect(200)
+  return { ...tank, sumpId }
+}
+
+/** Readings of a moment in one body of water. */
+export async function readingsNow(
+  api: TestApi,
+  waterBodyId: string,
+  values: Record<string, [value: string, unit: string]>,
+  happenedAt = '2026-12-01T18:10:00Z',
+): Promise<void> {
+  const readings = Object.entries(values).map(([parameter, [value, unit]]) => ({
+    id: api.nextId(),
+    parameter,
+    value: { value, unit },
+    ...(parameter === 'ph' ? { scale: 'nbs' } : {}),
+  }))
+  await (
+    await api.as('technician')
+  ).agent
+    .post('/api/readings')
+    .send({ waterBodyId, happenedAt, readings })
+    .expect(201)
+}
+
+/** A group of marine fish in an enclosure. */
+export async function aSchool(
+  api: TestApi,
+  enclosureId: string,
+  n: number,
+): Promise<{ id: string; accession: string }> {
+  const taxonId = await aTaxon(api, {
+    scientificName: `Zebrasoma flavescens ${String(n)}`,
+    commonName: 'Yellow tang',
+    group: 'teleost',
+  })
+  return aGroup(api, { taxonId, enclosureId, count: 14 })
+}
+
+/** A product with a usable lot, entered by the technician. */
+export async function aProduct(api: TestApi, given: object, expiresOn = '2028-03-31') {
+  const { agent } = await api.as('technician')
+  const id = api.nextId()
+  const lotId = api.nextId()
+  const product = {
+    id,
+    agent: 'praziquantel',
+    productName: 'Praziquantel powder',
+    form: 'powder',
+    strength: { value: '100', unit: 'percent_w_w' },
+    strengthBasis: 'active',
+    ...given,
+  }
+  await agent.post('/api/products').send(product).expect(201)
+  await agent
+    .post(`/api/products/${id}/lots`)
+    .send({ id: lotId, lotNumber: 'PZ-0317', expiresOn, receivedOn: '2026-01-10' })
+    .expect(201)
+  return { id, lotId }
+}
+
+/** The fields of a praziquantel bath, 2 mg/L left in the water; everything is filled in. */
+export const bathFields = (
+  given: Partial<BathOrderFields> & Pick<BathOrderFields, 'enclosureId'>,
+): BathOrderFields => ({
+  animalIds: [],
+  productId: null,
+  lotId: null,
+  doseLineId: null,
+  problem: 'Monogeneans on gill mount',
+  use: 'extralabel',
+  target: { value: '2', unit: 'mg/L' },
+  basis: 'active',
+  timing: 'indefinite',
+  contactMinutes: null,
+  doses: 1,
+  intervalHours: null,
+  startsAt: '2026-12-01T19:00:00Z',
+  setting: 'tank',
+  division: { value: '0.01', unit: 'g' },
+  stopIf: 'any fish lies on its side',
+  instructions: 'Dissolve in tank water and add over 20 min at the return.',
+  allowedVolumeDriftPercent: 5,
+  stated: {
+    waterKind: 'marine',
+    oxygenIsLogged: null,
+    hasBloom: null,
+    hasPlantsOrAlgae: null,
+    lights: null,
+    experienceWith: [],
+  },
+  ...given,
+})
+
+/** Keeps a draft as the veterinarian and gives its number and version. */
+export async function aDraft(api: TestApi, fields: BathOrderFields, by?: TestPerson) {
+  const person = by ?? (await api.as('veterinarian'))
+  const reply = await person.agent.post('/api/orders').send({ id: api.nextId(), fields })
+  if (reply.status !== 201) throw new Error(JSON.stringify(reply.body))
+  return {
+    number: reply.body.number as string,
+    version: reply.body.version as number,
+    id: reply.body.id as string,
+  }
+}
+
+/** Signs a draft as the veterinarian: reads every warning, overrides every stop that can be. */
+export async function signDraft(
+  api: TestApi,
+  draft: { number: string; version: number },
+  more: { overrides?: { ruleId: string; reason: string }[]; read?: string[] } = {},
+) {
+  const { agent } = await api.as('veterinarian')
+  const rules = Array.from({ length: 46 }, (_, i) => `R${String(i + 1).padStart(2, '0')}`)
+  return agent
+    .post(`/api/orders/${draft.number}/signature`)
+    .set('Idempotency-Key', newKey())
+    .send({
+      password,
+      expectedVersion: draft.version,
+      read: more.read ?? rules,
+      overrides: more.overrides ?? [],
+    })
+}
