@@ -108,5 +108,7 @@ export const quantityWords = defineMessages({
   to: 'to',
   atLeast: 'at least',
   atMost: 'at most',
+  /** The first use of a unit in a document: “250 µL/L (microlitres of product per litre)”. */
+  inWords: (p: { quantity: string; unit: string }) => `${p.quantity} (${p.unit})`,
   volumeWithError: (p: { volume: string; error: string }) => `${p.volume}, give or take ${p.error}`,
 })

@@ -175,6 +175,17 @@ describe('bad input to a bath', () => {
     expect(result.ok ? result.value : result.refusal).toMatchObject({ code, field })
   })
 
+  it('a target at the strength of the product cannot be reached, one just below it can', () => {
+    const of = (value: string) =>
+      computeBathDose({
+        target: { concentration: q(value, 'g/L'), basis: 'active' },
+        netLitres: 10,
+        product: { form: 'liquid', strength: q('3', 'percent_w_v'), strengthBasis: 'active' },
+      })
+    expect(of('30')).toMatchObject({ ok: false, refusal: { code: 'target-above-strength' } })
+    expect(of('29.999')).toMatchObject({ ok: true })
+  })
+
   it('ten divisions are enough, nine are not', () => {
     const of = (division: string) =>
       computeBathDose({ ...praziquantel, netLitres: 500, measure: { division: q(division, 'g') } })
