@@ -17,7 +17,15 @@ export function runCommand(command, args, options = {}) {
     let output = ''
     child.stdout?.on('data', (chunk) => (output += chunk))
     child.stderr?.on('data', (chunk) => (output += chunk))
-    child.on('error', (error) => resolve({ code: 127, output: error.message }))
+    child.on('error', (error) => {
+      if (error.name !== 'AbortError') return resolve({ code: 127, output: error.message })
+      // asked to end by `signal`, it is given time to end well; what it started itself is not waited for
+      const limit = setTimeout(() => child.kill('SIGKILL'), 10_000)
+      child.on('exit', (code) => {
+        clearTimeout(limit)
+        resolve({ code: code ?? 128, output })
+      })
+    })
     child.on('close', (code, signal) =>
       resolve({ code: code ?? 128, output: signal ? `${output}\n${signal}` : output }),
     )
