@@ -13,6 +13,7 @@ import { createFormulary } from './features/formulary/index.ts'
 import { createOrders } from './features/orders/index.ts'
 import { createPeople } from './features/people/index.ts'
 import { createPermits } from './features/permits/index.ts'
+import { createQuarantine } from './features/quarantine/index.ts'
 import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
 import { createWater } from './features/water/index.ts'
@@ -79,6 +80,14 @@ export function compose(outside: Outside) {
     documents,
   })
   const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
+  const quarantine = createQuarantine({
+    ...parts,
+    facility: facility.service,
+    people,
+    signing: signing.service,
+    animals,
+    water,
+  })
   return {
     parts,
     authenticator,
@@ -96,6 +105,7 @@ export function compose(outside: Outside) {
     exports,
     orders,
     administrations,
+    quarantine,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -113,6 +123,7 @@ export function compose(outside: Outside) {
       ...exports.routes,
       ...orders.routes,
       ...administrations.routes,
+      ...quarantine.routes,
     ],
     /** Ends what runs beside the requests. */
     close: () => parts.pdf.close(),

@@ -10,6 +10,7 @@ import { facilityEntities } from './features/facility/index.ts'
 import { formularyEntities } from './features/formulary/index.ts'
 import { peopleEntities } from './features/people/index.ts'
 import { permitEntities } from './features/permits/index.ts'
+import { quarantineEntities } from './features/quarantine/index.ts'
 import { signingEntities } from './features/signing/index.ts'
 import { waterEntities } from './features/water/index.ts'
 
@@ -30,4 +31,5 @@ export const entities = [
   ...permitEntities,
   ...acquisitionEntities,
   ...exportEntities,
+  ...quarantineEntities,
 ]

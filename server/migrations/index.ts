@@ -2,9 +2,11 @@ import { Foundation1764600000001 } from './0001-foundation.ts'
 import { Water1764600000002 } from './0002-water.ts'
 import { Animals1764600000003 } from './0003-animals.ts'
 import { Register1764600000004 } from './0004-register.ts'
+import { Quarantine1764600000011 } from './0011-quarantine.ts'
 import { Signing1764600000010 } from './0010-signing.ts'
 import { Formulary1764600000012 } from './0012-formulary.ts'
 import { Orders1764600000013 } from './0013-orders.ts'
+import { Notices1764600000014 } from './0014-notices.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -14,6 +16,8 @@ export const migrations = [
   Animals1764600000003,
   Register1764600000004,
   Signing1764600000010,
+  Quarantine1764600000011,
   Formulary1764600000012,
   Orders1764600000013,
+  Notices1764600000014,
 ]

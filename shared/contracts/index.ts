@@ -3,6 +3,7 @@ import * as acquisitions from './acquisitions.contract.ts'
 import * as animalRecords from './animal-records.contract.ts'
 import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
+import * as caseEvents from './case-events.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
 import * as counterparties from './counterparties.contract.ts'
 import * as documents from './documents.contract.ts'
@@ -13,6 +14,8 @@ import * as doses from './doses.contract.ts'
 import * as orders from './orders.contract.ts'
 import * as people from './people.contract.ts'
 import * as permits from './permits.contract.ts'
+import * as protocols from './protocols.contract.ts'
+import * as quarantine from './quarantine.contract.ts'
 import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
 import * as water from './water.contract.ts'
@@ -44,6 +47,9 @@ const modules = [
   permits,
   acquisitions,
   exports,
+  protocols,
+  quarantine,
+  caseEvents,
 ]
 
 const isContract = (value: unknown): value is Contract =>

@@ -77,6 +77,14 @@ export const problemStatus = {
   'not-held': 409,
   'dose-not-possible': 409,
   'first-calculation-missing': 409,
+  'case-ended': 409,
+  'already-closed': 409,
+  'already-in-a-case': 409,
+  'kinds-differ': 422,
+  'not-locked': 409,
+  'not-clearable': 409,
+  'reason-needed': 422,
+  'form-too-old': 409,
   'outside-working-order': 500,
 } as const satisfies Record<string, number>
 

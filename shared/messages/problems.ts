@@ -74,4 +74,12 @@ export const problemTitles = defineMessages({
   'already-explained': 'Somebody has explained this already',
   'permit-does-not-cover': 'A permit does not cover this',
   'fingerprint-not-unique': 'Several prints begin with these digits',
+  'case-ended': 'This quarantine case has ended',
+  'already-closed': 'The batch is closed already',
+  'already-in-a-case': 'This animal is in a running quarantine case',
+  'kinds-differ': 'A batch is of one quarantine kind',
+  'not-locked': 'Nothing is held or locked any more',
+  'not-clearable': 'This case can’t be cleared now',
+  'reason-needed': 'A reason is needed',
+  'form-too-old': 'This entry was made with a form that is no longer taken',
 })

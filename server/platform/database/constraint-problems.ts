@@ -37,6 +37,10 @@ const byConstraint: Record<string, ProblemCode> = {
   uq_permit_voids_permit: 'already-voided',
   uq_transaction_voids_transaction: 'already-voided',
   uq_permit_use_explanations_use: 'already-explained',
+  uq_protocol_confirmations_version: 'already-confirmed',
+  uq_case_events_cleared: 'case-ended',
+  uq_case_events_void: 'already-void',
+  uq_observation_voids_observation: 'already-void',
 }
 
 /** The problem for a broken constraint; null when none is foreseen, which is a bug and answers 500. */

@@ -1,0 +1,66 @@
+import type { Parts } from '../../platform/parts.ts'
+import type { Animals } from '../animals/index.ts'
+import type { FacilityService } from '../facility/index.ts'
+import type { People } from '../people/index.ts'
+import type { SigningService } from '../signing/index.ts'
+import type { Water } from '../water/index.ts'
+import { CaseEventRow, CaseMemberRow, CaseRow, CaseStepRecordRow } from './case.entity.ts'
+import { createCaseEventsService } from './case-events.service.ts'
+import { createCaseWriter } from './case-writer.ts'
+import { createCasesService } from './cases.service.ts'
+import { NoticeActRow, NoticeDeliveryRow, NoticeRow } from './notice.entity.ts'
+import {
+  ObservationCaseRow,
+  ObservationDeathRow,
+  ObservationReviewRow,
+  ObservationRow,
+  ObservationVoidRow,
+} from './observation.entity.ts'
+import { ProtocolConfirmationRow, ProtocolRow, ProtocolVersionRow } from './protocol.entity.ts'
+import { createProtocolsService } from './protocols.service.ts'
+import { createQuarantineQueries } from './quarantine.queries.ts'
+import { quarantineRoutes } from './quarantine.routes.ts'
+
+export type { CaseEventFacts } from './case-event-facts.ts'
+
+export const quarantineEntities = [
+  ProtocolRow,
+  ProtocolVersionRow,
+  ProtocolConfirmationRow,
+  CaseRow,
+  CaseMemberRow,
+  CaseEventRow,
+  CaseStepRecordRow,
+  ObservationRow,
+  ObservationCaseRow,
+  ObservationDeathRow,
+  ObservationVoidRow,
+  ObservationReviewRow,
+  NoticeRow,
+  NoticeDeliveryRow,
+  NoticeActRow,
+]
+
+export function createQuarantine(
+  given: Parts & {
+    facility: FacilityService
+    people: People
+    signing: SigningService
+    animals: Animals
+    water: Water
+  },
+) {
+  const parts = { ...given, people: given.people.questions, water: given.water.questions }
+  const writer = createCaseWriter(parts)
+  const cases = createCasesService({ ...parts, writer })
+  const events = createCaseEventsService({ ...parts, writer })
+  const protocols = createProtocolsService(parts)
+  const queries = createQuarantineQueries(parts)
+  return {
+    services: { cases, events, protocols },
+    queries,
+    routes: quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
+  }
+}
+
+export type Quarantine = ReturnType<typeof createQuarantine>
