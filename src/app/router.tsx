@@ -23,6 +23,11 @@ const sheetRoutes: RouteObject[] = [
     : [{ index: true, loader: () => redirect(paths.notInThisVersion('today')) } satisfies RouteObject]),
   { path: 'not-in-this-version/:sheet', lazy: () => import('./routes/not-in-this-version.tsx') },
   { path: 'settings/own', lazy: () => import('./routes/own-settings.tsx') },
+  { path: 'settings/people', lazy: () => import('./routes/people.tsx') },
+  { path: 'settings/people/new', lazy: () => import('./routes/new-person.tsx') },
+  { path: 'settings/people/:id', lazy: () => import('./routes/person.tsx') },
+  { path: 'settings/facility', lazy: () => import('./routes/facility-settings.tsx') },
+  { path: 'settings/audit', lazy: () => import('./routes/audit.tsx') },
 ]
 
 /** The routes of the whole client. */

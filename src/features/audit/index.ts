@@ -1,0 +1,1 @@
+export { AuditTrail } from './audit-trail.tsx'

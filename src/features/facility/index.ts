@@ -1,0 +1,1 @@
+export { FacilitySettings } from './facility-settings.tsx'

@@ -1,0 +1,96 @@
+import { useState } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import { KeyRound } from 'lucide-react'
+import { Link } from 'react-router-dom'
+import { licenceSummaries, peopleWords, roleTitles } from '../../../shared/messages/people.ts'
+import { newId } from '../../lib/new-id.ts'
+import { paths } from '../../lib/paths.ts'
+import { isProblem } from '../../lib/problem-error.ts'
+import { Button } from '../../ui/button.tsx'
+import { Cartouche } from '../../ui/cartouche.tsx'
+import { Dialog } from '../../ui/dialog.tsx'
+import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { Area, Sheet } from '../../ui/sheet.tsx'
+import { CorrectPersonForm } from './correct-person-form.tsx'
+import { LicenceList } from './licence-list.tsx'
+import { useIssueOneTimePassword } from './mutations.ts'
+import { OneTimePassword } from './one-time-password.tsx'
+import { personQuery } from './queries.ts'
+
+/** One person: name, roles, account, password, licences. */
+export function PersonSheet({ id }: { id: string }) {
+  const query = useQuery(personQuery(id))
+  const [asking, setAsking] = useState<string | null>(null)
+  const [loaded, setLoaded] = useState(0)
+  const issue = useIssueOneTimePassword(id)
+  const person = query.data
+  const problem = isProblem(query.error) ? query.error : null
+
+  return (
+    <Sheet recipe="list">
+      <Area>
+        <Cartouche
+          place={<Link to={paths.people()}>{peopleWords.title}</Link>}
+          title={person?.printedName ?? peopleWords.people}
+          source={
+            person
+              ? `${person.roles.map((role) => roleTitles[role]).join(', ')} · ${peopleWords.licence}: ${licenceSummaries[person.licenceState]}`
+              : undefined
+          }
+        />
+        {person ? (
+          <div className="pane stack">
+            <Button icon={KeyRound} onClick={() => setAsking(newId())}>
+              {peopleWords.oneTimeNew}
+            </Button>
+            {issue.data ? (
+              <OneTimePassword name={person.printedName} password={issue.data.oneTimePassword} />
+            ) : null}
+          </div>
+        ) : null}
+      </Area>
+      <Area className="pane stack gap-6">
+        {problem ? (
+          <ListUnreadable
+            title={problem.code === 'not-found' ? peopleWords.notHere : undefined}
+            why={problem.says}
+            code={problem.requestId}
+            onRetry={() => void query.refetch()}
+          />
+        ) : null}
+        {query.isPending ? <ListFetching what={peopleWords.list} /> : null}
+        {person ? (
+          <>
+            <CorrectPersonForm
+              key={`${person.id} ${String(loaded)}`}
+              person={person}
+              onLoadNewer={() => void query.refetch().then(() => setLoaded((n) => n + 1))}
+            />
+            <LicenceList person={person} />
+          </>
+        ) : null}
+      </Area>
+      {asking && person ? (
+        <Dialog
+          question={peopleWords.oneTimeAsk({ name: person.printedName })}
+          onBack={() => setAsking(null)}
+          acts={
+            <>
+              <Button
+                kind="primary"
+                disabled={issue.isPending}
+                onClick={() => issue.mutate(asking, { onSuccess: () => setAsking(null) })}
+              >
+                {peopleWords.oneTimeAct}
+              </Button>
+              <Button onClick={() => setAsking(null)}>{peopleWords.goBack}</Button>
+            </>
+          }
+        >
+          <p>{peopleWords.oneTimeWarn}</p>
+          {isProblem(issue.error) ? <p role="alert">{issue.error.says}</p> : null}
+        </Dialog>
+      ) : null}
+    </Sheet>
+  )
+}

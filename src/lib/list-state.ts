@@ -1,0 +1,64 @@
+import { useState } from 'react'
+import { useSearchParams } from 'react-router-dom'
+
+/** What a list is searched, filtered and sorted by, as it stands in the address. */
+export interface ListState {
+  /** A filter or `q`, `sort`, `direction`, `cursor`; undefined when it is not in the address. */
+  get: (name: string) => string | undefined
+  /** Sets filters and goes back to the first page; an empty value takes a filter away. */
+  set: (changes: Readonly<Record<string, string | undefined>>) => void
+  cursor: string | undefined
+  /** Number of the first row shown, from 1. */
+  from: number
+  /** Goes to the page that begins at a cursor. */
+  next: (cursor: string, shown: number) => void
+  /** Goes to the page before; undefined on the first. */
+  before: (() => void) | undefined
+}
+
+/**
+ * The state of a list, kept in the address bar, so that a link, a reload and the way back show the same rows.
+ * Cursors are opaque; the pages that were passed are remembered, and a page opened by its link leads back to the first.
+ */
+export function useListState(): ListState {
+  const [search, setSearch] = useSearchParams()
+  const [passed, setPassed] = useState<{ cursor: string | null; from: number }[]>([])
+  const change = (changes: Readonly<Record<string, string | undefined>>) =>
+    setSearch(
+      (old) => {
+        const next = new URLSearchParams(old)
+        for (const [name, value] of Object.entries(changes)) {
+          if (value) next.set(name, value)
+          else next.delete(name)
+        }
+        return next
+      },
+      { replace: true },
+    )
+  const cursor = search.get('cursor') ?? undefined
+  const from = Number(search.get('from') ?? '1') || 1
+  return {
+    get: (name) => search.get(name) ?? undefined,
+    set: (changes) => {
+      setPassed([])
+      change({ ...changes, cursor: undefined, from: undefined })
+    },
+    cursor,
+    from,
+    next: (nextCursor, shown) => {
+      setPassed([...passed, { cursor: cursor ?? null, from }])
+      change({ cursor: nextCursor, from: String(from + shown) })
+    },
+    before:
+      cursor === undefined
+        ? undefined
+        : () => {
+            const last = passed.at(-1)
+            setPassed(passed.slice(0, -1))
+            change({
+              cursor: last?.cursor ?? undefined,
+              from: last && last.from > 1 ? String(last.from) : undefined,
+            })
+          },
+  }
+}
