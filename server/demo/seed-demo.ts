@@ -5,6 +5,7 @@ import { settableClock } from '../platform/clock.ts'
 import type { Log } from '../platform/log.ts'
 import { seedAnimals, seedTaxa } from './animals.ts'
 import { seedFormulary } from './formulary.ts'
+import { seedOrders } from './orders.ts'
 import { demoPassword, demoPeople, seedPeople } from './people.ts'
 import { seedWater } from './water.ts'
 
@@ -34,6 +35,8 @@ export async function seedDemo(outside: {
     const { enclosureIds } = await seedWater(composition, { clock, now, people: actors })
     const taxa = await seedTaxa(composition, actors)
     await seedAnimals(composition, { clock, now, people: actors, enclosureIds, taxa })
+    await seedOrders(composition, { clock, now, people: actors, enclosureIds })
+    await composition.close()
     return true
   } finally {
     await runner.query('SELECT pg_advisory_unlock($1)', [seedLock])
