@@ -10,7 +10,10 @@ import { redirectSignedIn, requireSignIn } from './require-sign-in.ts'
 const withParts = import.meta.env.DEV || import.meta.env.VITE_PARTS === '1'
 
 const partsRoutes: RouteObject[] = withParts
-  ? [{ path: 'parts', lazy: () => import('../parts/parts-page.tsx') }]
+  ? [
+      { path: 'parts', lazy: () => import('../parts/parts-page.tsx') },
+      { path: 'parts/sheet', lazy: () => import('../parts/sheet-page.tsx') },
+    ]
   : []
 
 /**

@@ -2,7 +2,8 @@ import { addDays, daysBetween } from '../../shared/domain/time/facility-date.ts'
 import { longDay, shortDay } from './day-words.ts'
 import type { DayScale } from './passage/day-scale.ts'
 
-const height = 40
+/** Height of the ruler in px. */
+export const dayRulerHeight = 40
 /** Room that a date takes before the next may stand. */
 const dateRoom = 46
 
@@ -18,7 +19,7 @@ export function DayRuler({ scale, today, y }: { scale: DayScale; today: string; 
   const boxX = Math.min(Math.max(nowX, 38), width - 38)
   return (
     <g>
-      <rect x="0" y={y} width={width} height={height} className="p-paper" />
+      <rect x="0" y={y} width={width} height={dayRulerHeight} className="p-paper" />
       <path d={`M0 ${y + 0.5}H${width}M0 ${y + 9.5}H${width}`} className="p-line" />
       {Array.from({ length: Math.ceil(days / gradeDays / 2) }, (_, i) => (
         <rect
@@ -59,5 +60,5 @@ export function rulerDates(scale: DayScale): { date: string; x: number; bold: bo
       month = date.slice(0, 7)
       return { date, x: scale.x(date), bold }
     })
-    .filter(({ x }) => x + 34 < scale.width)
+    .filter(({ x }) => x + 42 < scale.width)
 }

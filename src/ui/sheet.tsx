@@ -2,7 +2,8 @@ import { createContext, useContext } from 'react'
 import type { ComponentProps, ReactNode } from 'react'
 import { classNames } from './class-names.ts'
 
-export type SheetRecipe = 'plain' | 'list' | 'board' | 'case' | 'order' | 'record' | 'enclosure' | 'register'
+export type SheetRecipe =
+  'plain' | 'list-log' | 'list' | 'board' | 'case' | 'order' | 'record' | 'enclosure' | 'register'
 
 /** Whether an hour ruler stands above the sheet and is its upper edge. The frame says so. */
 export const HoursAboveContext = createContext(false)

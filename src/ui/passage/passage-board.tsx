@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom'
 import { passageWords } from '../../../shared/messages/passage.ts'
 import { classNames } from '../class-names.ts'
-import { DayRuler } from '../day-ruler.tsx'
+import { DayRuler, dayRulerHeight } from '../day-ruler.tsx'
 import { FlagMark } from '../flag-mark.tsx'
 import { useMedia } from '../use-media.ts'
 import { useWidth } from '../use-width.ts'
@@ -32,7 +32,6 @@ const rowSizes = {
   stacked: { height: 124, course: 88, head: 54 },
 } as const
 
-const rulerHeight = 40
 const shoreBehindHarbour = 13
 
 /** Every case as a passage on one day ruler. Each row's link opens its case; each mark can be focused and opened. */
@@ -70,8 +69,8 @@ export function PassageBoard({ passages, from, until, today, density }: PassageB
       <div ref={frame} className="passage min-w-0 overflow-hidden">
         <svg
           width={width}
-          height={height + rulerHeight}
-          viewBox={`0 0 ${width} ${height + rulerHeight}`}
+          height={height}
+          viewBox={`0 0 ${width} ${height}`}
           role="img"
           aria-label={passageWords.boardLabel({
             count: passages.length,
@@ -101,14 +100,25 @@ export function PassageBoard({ passages, from, until, today, density }: PassageB
               <HarbourLabel view={view} course={course} width={width} oneLine={size === 'close'} />
             </g>
           ))}
-          <path d={`M${scale.x(today)} 0V${height + 12}`} className="p-now" />
-          <DayRuler scale={scale} today={today} y={height} />
+          <path d={`M${scale.x(today)} 0V${height}`} className="p-now" />
         </svg>
         <div className="passage-fixes">
           {rows.map(({ view, course }) => (
             <PassageFixes key={view.id} view={view} marks={course.marks} width={width} />
           ))}
         </div>
+      </div>
+      {/* stays in view while the rows scroll over it */}
+      <div className="board-ruler">
+        <svg
+          width={width}
+          height={dayRulerHeight}
+          viewBox={`0 0 ${width} ${dayRulerHeight}`}
+          aria-hidden="true"
+        >
+          <DayRuler scale={scale} today={today} y={0} />
+          <path d={`M${scale.x(today)} 0V13`} className="p-now" />
+        </svg>
       </div>
     </div>
   )

@@ -1,6 +1,6 @@
 import { passageWords } from '../../../shared/messages/passage.ts'
 import { classNames } from '../class-names.ts'
-import { DayRuler } from '../day-ruler.tsx'
+import { DayRuler, dayRulerHeight } from '../day-ruler.tsx'
 import { useWidth } from '../use-width.ts'
 import { layCaseLabels } from './case-labels.ts'
 import { CourseDrawing } from './course-drawing.tsx'
@@ -15,7 +15,6 @@ import { harbourWords, passageSummary } from './passage-words.ts'
 import type { PassageLeg, PassageView } from './passage-view.ts'
 
 const water = 200
-const rulerHeight = 40
 const courseY = 136
 
 /** One case as its passage, large: legs, steps with their days, now, and the harbour. */
@@ -43,8 +42,8 @@ export function PassageCase({
     <div ref={frame} className="passage overflow-hidden">
       <svg
         width={width}
-        height={water + rulerHeight}
-        viewBox={`0 0 ${width} ${water + rulerHeight}`}
+        height={water + dayRulerHeight}
+        viewBox={`0 0 ${width} ${water + dayRulerHeight}`}
         role="img"
         aria-label={passageSummary(view)}
       >
