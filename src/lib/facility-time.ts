@@ -33,11 +33,3 @@ export function useFacilityNow(zone: Zone): FacilityNow {
   }, [zone])
   return now
 }
-
-/** "UTC−4", "UTC+5:30", "UTC": the offset in force in a zone at an instant. */
-export function offsetWords(at: Date, zone: Zone): string {
-  const part = new Intl.DateTimeFormat('en-US', { timeZone: zone, timeZoneName: 'shortOffset' })
-    .formatToParts(at)
-    .find(({ type }) => type === 'timeZoneName')
-  return (part?.value ?? 'UTC').replace('GMT', 'UTC').replace('+0', '').replace('-', '\u2212')
-}

@@ -1,19 +1,15 @@
-const month = new Intl.DateTimeFormat('en-US', { month: 'short', timeZone: 'UTC' })
-const weekday = new Intl.DateTimeFormat('en-US', { weekday: 'short', timeZone: 'UTC' })
+import { sayDate } from '../../shared/messages/say-date.ts'
+import { weekdays } from '../../shared/messages/weekdays.ts'
 
-const utc = (date: string) => new Date(`${date}T00:00:00Z`)
+const noBreak = '\u00a0'
 
-/** "14 May" of a facility date. */
+/** "14 May" of a facility date, for rulers and lists where the year is plain. */
 export function shortDay(date: string): string {
-  return `${utc(date).getUTCDate()}\u00a0${month.format(utc(date))}`
-}
-
-/** "14 May 2026" of a facility date. */
-export function fullDay(date: string): string {
-  return `${shortDay(date)}\u00a0${utc(date).getUTCFullYear()}`
+  return sayDate(date).split(noBreak).slice(0, 2).join(noBreak)
 }
 
 /** "Thu 14 May" of a facility date. */
 export function longDay(date: string): string {
-  return `${weekday.format(utc(date))}\u00a0${shortDay(date)}`
+  const day = new Date(`${date}T00:00:00Z`).getUTCDay()
+  return `${weekdays[`d${day}` as keyof typeof weekdays]}${noBreak}${shortDay(date)}`
 }

@@ -45,6 +45,14 @@ describe.each([
     await page.getByRole('heading', { name: 'Parts, night watch' }).waitFor()
     await page.waitForTimeout(400)
     await expectAccessible(page, `parts at ${size.width} px`)
+  }, 180_000)
+
+  it('shows a whole sheet without a fault, within the width of the screen', async () => {
+    const { page } = await newSession(browser, { ...size, ...signedOut })
+    await page.goto(`${withParts.url}/parts/sheet`)
+    await page.getByRole('heading', { name: 'Passages' }).waitFor()
+    await expectAccessible(page, `a sheet at ${size.width} px`)
+    expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(size.width)
   })
 
   it('stays within the width of the screen', async () => {
@@ -61,23 +69,23 @@ describe('what opens over the parts', () => {
     await page.goto(`${withParts.url}/parts`)
     await page.getByRole('combobox', { name: 'Enclosure' }).first().click()
     await page.getByRole('option', { name: /QT-5/ }).waitFor()
-    await expectAccessible(page, 'open list')
+    await expectAccessible(page, 'open list', '.combobox-anchor')
     await page.keyboard.press('Escape')
 
     await page.getByRole('button', { name: 'Open the dialog' }).first().click()
     await page.getByRole('dialog', { name: 'Stop order TO-0728?' }).waitFor()
-    await expectAccessible(page, 'open dialog')
+    await expectAccessible(page, 'open dialog', 'dialog')
     await page.keyboard.press('Escape')
     expect(await page.getByRole('dialog').count()).toBe(0)
 
     await page.getByRole('button', { name: 'Open the log as a drawer' }).first().click()
     await page.getByRole('dialog', { name: 'Ship’s log' }).waitFor()
-    await expectAccessible(page, 'open drawer')
+    await expectAccessible(page, 'open drawer', 'dialog')
     await page.keyboard.press('Escape')
     expect(await page.getByRole('dialog').count()).toBe(0)
 
     await page.getByRole('navigation', { name: 'Due today' }).first().getByRole('link').first().focus()
-    await expectAccessible(page, 'focused tick')
+    await expectAccessible(page, 'focused tick', '.hour-ruler')
   })
 
   it('never throws typed words away without asking, however often Esc is pressed', async () => {

@@ -1,5 +1,6 @@
 import { frameWords } from '../../../shared/messages/frame.ts'
 import { ownSettingsWords } from '../../../shared/messages/own-settings.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { useMe } from '../../lib/me.ts'
@@ -9,7 +10,6 @@ import { isProblem } from '../../lib/problem-error.ts'
 import { chooseTheme, themeChoices, useThemeChoice } from '../../lib/theme.ts'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { ChoiceField } from '../../ui/choice-field.tsx'
-import { fullDay } from '../../ui/day-words.ts'
 import { FlagWords } from '../../ui/flag-mark.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
@@ -48,7 +48,7 @@ export function Component() {
                 {ownSettingsWords.licenceLine({
                   number: licence.number,
                   jurisdiction: licence.jurisdiction,
-                  until: fullDay(licence.validUntil),
+                  until: sayDate(licence.validUntil),
                 })}
               </p>
             </div>

@@ -201,8 +201,7 @@ it('draws every word of the frame from a catalogue', async () => {
   const walker = document.createTreeWalker(place, NodeFilter.SHOW_TEXT)
   while (walker.nextNode()) texts.push(walker.currentNode.textContent ?? '')
   const plain = texts.filter(
-    (text) =>
-      /[A-Za-z]{2}/.test(text) && !text.includes('[') && !/^(Dr Ilse Marrow|\w{3}\s\d+\s\w{3})$/.test(text),
+    (text) => /[A-Za-z]{2}/.test(text) && !text.includes('[') && !/^Dr Ilse Marrow$/.test(text),
   )
   expect(plain).toEqual([])
   expect(texts.some((text) => text.includes('['))).toBe(true)
