@@ -5,6 +5,7 @@ import { allContracts } from '../../shared/contracts/index.ts'
 import { problemStatus } from '../../shared/contracts/problems.ts'
 import { actions } from '../../shared/domain/permissions/table.ts'
 import { problemTitles } from '../../shared/messages/problems.ts'
+import { apiDocument } from '../../server/platform/http/api-document.ts'
 import { openApiDocument } from '../../server/platform/http/openapi.ts'
 
 type Schema = { description?: string; properties?: Record<string, Schema>; items?: Schema; anyOf?: Schema[] }
@@ -55,6 +56,10 @@ describe('contracts', () => {
 
   it('give every problem a title', () => {
     expect(Object.keys(problemTitles).sort()).toEqual(Object.keys(problemStatus).sort())
+  })
+
+  it('are what docs/api.md says', async () => {
+    await expect(apiDocument()).toMatchFileSnapshot('../../docs/api.md')
   })
 
   it('make an OpenAPI 3.1 document with every operation', () => {
