@@ -62,6 +62,16 @@ export const ProtocolContentBody = z
           name: z.string().trim().min(1).max(200).describe('What is done'),
           short: z.string().trim().min(1).max(30).describe('The same in two words'),
           testKey: Key.optional(),
+          masks: z
+            .boolean()
+            .optional()
+            .describe('Treatment that hides what the tests look for; taken so unless false'),
+          maskingWindowDays: Days.optional().describe(
+            'Days that it hides them after its end, where not the usual',
+          ),
+          fadingDays: Days.optional().describe(
+            'Days until the agent is out of the water, where it is left to fade',
+          ),
         }),
       )
       .min(1)

@@ -8,7 +8,7 @@ import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import type { Drift } from '../../../shared/domain/dose/check-drift.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
-import type { PlannedDose } from '../../../shared/domain/orders/planned-doses.ts'
+import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { known } from '../../../shared/domain/cautions/fact.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -83,11 +83,14 @@ export async function readDoseSituation(
     throw new Problem('not-found', { detail: 'The signed text of this order cannot be read any more.' })
   const { content } = sealed
   const { fields } = content
-  const planned = plannedDoses({
-    startsAt: fields.startsAt ?? sealed.block.signedAt,
-    doses: fields.doses,
-    intervalHours: fields.intervalHours,
-  }).find((dose) => dose.key === key)
+  const planned = plannedDoses(
+    {
+      startsAt: fields.startsAt ?? sealed.block.signedAt,
+      doses: fields.doses,
+      intervalHours: fields.intervalHours,
+    },
+    sealed.block.zone,
+  ).find((dose) => dose.key === key)
   if (!planned) throw new Problem('not-found', { detail: 'The order plans no such dose.' })
   const db = options.db ?? parts.dataSource
   const records = await readDoses(db, sealed.row.id)

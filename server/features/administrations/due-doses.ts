@@ -1,7 +1,6 @@
 import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import type { listDueDoses } from '../../../shared/contracts/doses.contract.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
-import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
@@ -11,7 +10,6 @@ import { readDoses } from './administrations.reads.ts'
 type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
 
 const aheadHours = 24
-const singleDoseHours = 24
 
 /** Doses that are due until an instant, late, or running now, in time order. */
 export async function findDueDoses(
@@ -24,14 +22,13 @@ export async function findDueDoses(
   const found: DueDose[] = []
   for (const { row, plan } of orders) {
     const records = await readDoses(parts.dataSource, row.id)
-    const window = doseWindow(plan.intervalHours ?? singleDoseHours)
-    for (const dose of plannedDoses(plan)) {
+    for (const dose of plannedDoses(plan, plan.zone)) {
       const mine = records.filter((record) => record.dose_key === dose.key)
       const running = mine.some(
         (record) => record.stop_at === null && record.kind !== 'withheld' && plan.timed,
       )
       if ((mine.length > 0 && !running) || Date.parse(dose.dueAt) > Date.parse(until)) continue
-      const latestAt = addHours(dose.dueAt, window.lateHours)
+      const latestAt = dose.closesAt
       const late = Date.parse(now) > Date.parse(latestAt)
       found.push({
         number: row.number,

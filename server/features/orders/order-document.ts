@@ -165,7 +165,10 @@ function givenBlock({ content, block }: OrderPaper): DocumentBlock {
   const { fields, amount } = content
   const unit = amount.measured?.unit ?? amount.unroundedUnit
   const planned = fields.startsAt
-    ? plannedDoses({ startsAt: fields.startsAt, doses: fields.doses, intervalHours: fields.intervalHours })
+    ? plannedDoses(
+        { startsAt: fields.startsAt, doses: fields.doses, intervalHours: fields.intervalHours },
+        block.zone,
+      )
     : []
   return {
     kind: 'table',

@@ -1,28 +1,31 @@
 import type { BathOrderFields, OrderRow } from '../../../shared/contracts/orders.contract.ts'
-import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
 import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
-/** A single dose has no interval; it may be given within a day of its time. Project default. */
-const singleDoseHours = 24
+/** What the signature froze beside the content: the zone by whose clock the doses were planned. */
+export function signedZone(row: OrderReadRow): string {
+  if (row.signed_text === null) return 'UTC'
+  try {
+    return (JSON.parse(row.signed_text) as { signedBy?: { zone?: string } }).signedBy?.zone ?? 'UTC'
+  } catch {
+    return 'UTC'
+  }
+}
 
 function standingOfRow(row: OrderReadRow): OrderStanding {
   const signed =
     row.starts_at && row.doses !== null
-      ? plannedDoses({
-          startsAt: row.starts_at.toISOString(),
-          doses: row.doses,
-          intervalHours: row.interval_hours,
-        })
+      ? plannedDoses(
+          { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours },
+          signedZone(row),
+        )
       : null
   const last = signed?.at(-1)
-  const window = doseWindow(row.interval_hours ?? singleDoseHours)
   return {
     stage: row.stage,
     signed:
@@ -30,7 +33,7 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
         ? {
             planned: signed,
             doneKeys: row.done_keys,
-            lastWindowUntil: addHours(last.dueAt, window.lateHours),
+            lastWindowUntil: last.closesAt,
           }
         : null,
     held: row.held,

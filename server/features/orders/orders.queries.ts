@@ -11,7 +11,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
-import { presentOrderRow } from './orders.present.ts'
+import { presentOrderRow, signedZone } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readVersions } from './orders.reads.ts'
 
 export interface OrderQueriesParts {
@@ -121,6 +121,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
           doses: row.doses,
           intervalHours: row.interval_hours,
           timed: row.contact_minutes !== null,
+          zone: signedZone(row),
         }
         return [{ row: shown, plan }]
       })

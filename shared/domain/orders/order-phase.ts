@@ -1,6 +1,6 @@
 import { compareInstants } from '../time/instant-arithmetic.ts'
 import type { Instant } from '../time/instant.ts'
-import type { PlannedDose } from './planned-doses.ts'
+import type { PlannedDose } from '../schedule/plan-doses.ts'
 
 export type OrderPhase =
   'draft' | 'proposed' | 'not-started' | 'in-progress' | 'held' | 'completed' | 'expired' | 'discontinued'

@@ -1,24 +1,22 @@
-import { addHours } from '../time/instant-arithmetic.ts'
-import type { Instant } from '../time/instant.ts'
-
-export interface PlannedDose {
-  /** Names the dose within its version: `1`, `2` … */
-  key: string
-  dueAt: Instant
-}
+import { type PlannedDose, planDoses } from '../schedule/plan-doses.ts'
+import type { Instant, Zone } from '../time/instant.ts'
 
 /**
- * The doses that an order plans, at true hours from the first.
+ * The doses that an order for a bath plans, with their windows.
  *
  * @param plan doses, 1 or more; hours between them, null for a single dose
+ * @param zone the facility's zone: a daily dose keeps its time of day when the clocks change
+ * @returns in time order; none where the plan is not one (a draft that lacks a figure)
  */
-export function plannedDoses(plan: {
-  startsAt: Instant
-  doses: number
-  intervalHours: number | null
-}): PlannedDose[] {
-  return Array.from({ length: plan.doses }, (_, i) => ({
-    key: String(i + 1),
-    dueAt: addHours(plan.startsAt, i * (plan.intervalHours ?? 0)),
-  }))
+export function plannedDoses(
+  plan: { startsAt: Instant; doses: number; intervalHours: number | null },
+  zone: Zone,
+): PlannedDose[] {
+  const { startsAt, doses, intervalHours } = plan
+  const planned = planDoses(
+    intervalHours === null ? { kind: 'once' } : { kind: 'every-hours', intervalHours, doseCount: doses },
+    startsAt,
+    zone,
+  )
+  return planned.ok ? planned.value : []
 }

@@ -1,31 +1,58 @@
 import { type Result, ok, refuse } from '../result.ts'
+import type { NegativesCriterion } from '../quarantine/clock-policy.ts'
 import type { ProtocolContent, ProtocolStep } from './protocol-content.ts'
 
 export type ProtocolRefusal =
   'window-reversed' | 'step-key-twice' | 'criterion-without-name' | 'test-without-name' | 'length-too-short'
 
 /**
- * The earliest day on which the protocol's own steps could be finished, when each is done on the first day of its
- * window: treatments with the window in which they hide what the tests look for, and negatives with their distances.
+ * The shortest length that the protocol's own steps can meet: the last day of every treatment and sample, the end of
+ * every masking treatment with the window in which it hides what the tests look for, and the day on which the planned
+ * samples meet each criterion. A course counts to its last day, not its first.
  *
  * @returns day counted from day 0; 0 for a protocol without such steps
+ * @source project-default: windows and distances are the protocol's own
  */
 export function shortestLengthDays(content: ProtocolContent): number {
   const { policy, steps } = content
-  const lastTreatDay = Math.max(-1, ...steps.filter(({ kind }) => kind === 'treat').map(({ day }) => day))
-  const afterMasking = lastTreatDay < 0 ? 0 : lastTreatDay + policy.maskingWindowDays
-  const ofCriteria = policy.criteria.map((criterion) => {
-    if (criterion.kind !== 'negatives') return 0
-    const first = firstSampleDay(steps, criterion.testKey)
-    const apart = (first ?? 0) + (criterion.count - 1) * criterion.daysApart
-    return lastTreatDay < 0 ? apart : Math.max(apart, lastTreatDay + criterion.daysAfterMasking)
-  })
-  return Math.max(0, afterMasking, ...ofCriteria)
+  const work = steps.filter(({ kind }) => kind === 'treat' || kind === 'sample')
+  const masking = steps.filter((step) => step.kind === 'treat' && step.masks !== false)
+  const afterMasking = masking.map(
+    (step) => lastDay(step) + (step.maskingWindowDays ?? policy.maskingWindowDays),
+  )
+  const lastMaskDay = masking.length > 0 ? Math.max(...masking.map(lastDay)) : null
+  const ofCriteria = policy.criteria.map((criterion) =>
+    criterion.kind === 'negatives' ? meetingDay(criterion, steps, lastMaskDay) : 0,
+  )
+  return Math.max(0, ...work.map(lastDay), ...afterMasking, ...ofCriteria)
 }
 
-function firstSampleDay(steps: readonly ProtocolStep[], testKey: string): number | null {
-  const days = steps.filter((step) => step.testKey === testKey).map(({ day }) => day)
-  return days.length > 0 ? Math.min(...days) : null
+/** The day on which a step is over, and its agent out of the water. */
+function lastDay(step: ProtocolStep): number {
+  return step.untilDay + (step.fadingDays ?? 0)
+}
+
+/**
+ * The day of the first planned sample that can be the last of k, as the clock counts negatives (K15). Where the planned
+ * ones are not enough, the day to which they would have to be continued.
+ */
+function meetingDay(
+  { testKey, count, daysApart, daysAfterMasking }: NegativesCriterion,
+  steps: readonly ProtocolStep[],
+  lastMaskDay: number | null,
+): number {
+  const notBefore = lastMaskDay === null ? 0 : lastMaskDay + daysAfterMasking
+  const days = steps.filter((step) => step.testKey === testKey).map(({ untilDay }) => untilDay)
+  const chain: number[] = []
+  for (const day of days.sort((a, b) => a - b)) {
+    const before = chain.filter((earlier) => day - earlier >= daysApart).length
+    if (before + 1 >= count && day >= notBefore) return day
+    if (before === chain.length) chain.push(day)
+  }
+  const missing = Math.max(1, count - chain.length)
+  const behind = chain[Math.min(chain.length, count - 1) - 1]
+  const spaced = behind === undefined ? (missing - 1) * daysApart : behind + missing * daysApart
+  return Math.max(spaced, notBefore)
 }
 
 /**

@@ -21,6 +21,12 @@ export interface ProtocolStep {
   short: string
   /** Of a sample: which results it gives. */
   testKey?: string
+  /** Of a treatment: whether it hides what the tests look for; it is taken to, unless said otherwise. */
+  masks?: boolean
+  /** Of a masking treatment: its own window, where a veterinarian set one. */
+  maskingWindowDays?: number
+  /** Of a treatment left to fade: days until the agent is out of the water. */
+  fadingDays?: number
 }
 
 /** Everything that one version of a protocol says. Immutable; a change is a new version. */

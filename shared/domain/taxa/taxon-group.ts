@@ -1,6 +1,8 @@
-/** The kinds by which quarantine tells animals apart: an added wrasse is of one kind with tangs, whatever its order. */
-export const quarantineKindNames = ['fish', 'amphibian', 'reptile', 'bird', 'mammal', 'invertebrate'] as const
-export type QuarantineKindName = (typeof quarantineKindNames)[number]
+import { type QuarantineKind, quarantineKinds } from '../quarantine/quarantine-kind.ts'
+
+/** The kinds by which quarantine tells animals apart, under the name that contracts and tables of taxa use. */
+export const quarantineKindNames = quarantineKinds
+export type QuarantineKindName = QuarantineKind
 
 /**
  * Groups of taxa as the rules of treatment and quarantine tell them apart: a group is what a caution asks for, not a

@@ -41,6 +41,77 @@ describe('whether a protocol can meet its own length', () => {
     )
   })
 
+  // Lengths of the quarantine reference, section 1.4: computed there with 14 days after the last masking step (C; the
+  // days and windows are project defaults, P).
+  const course = (key: string, day: number, untilDay: number, more = {}) => ({
+    ...treat(day),
+    key,
+    untilDay,
+    ...more,
+  })
+  const sample = (key: string, day: number, testKey: string) => ({
+    ...treat(day),
+    kind: 'sample' as const,
+    key,
+    testKey,
+  })
+  it.each([
+    ['copper counted to its last day, day 25', [course('copper', 2, 25)], 39],
+    [
+      'last bath left to fade for 2 days',
+      [course('copper', 2, 25), course('a', 28, 28), course('b', 36, 36, { fadingDays: 2 })],
+      52,
+    ],
+    [
+      'chloroquine and two baths left to fade',
+      [course('cq', 2, 23), course('b', 32, 32, { fadingDays: 2 })],
+      48,
+    ],
+    ['three baths 10 days apart left to fade', [course('c', 25, 25, { fadingDays: 2 })], 41],
+    [
+      'third faecal on day 35, second swab by day 33',
+      [sample('f', 35, 'faecal'), sample('s', 33, 'swab')],
+      35,
+    ],
+    ['feed course to day 16', [course('bath', 3, 10), course('feed', 7, 16)], 30],
+    ['a treatment that masks nothing', [course('fluids', 20, 20, { masks: false })], 20],
+    ['a window of its own', [course('bath', 20, 20, { maskingWindowDays: 21 })], 41],
+  ])('%s: %#', (_, steps, needed) => {
+    expect(shortestLengthDays(protocol({ steps }))).toBe(needed)
+  })
+
+  const two = {
+    criterionId: 'c',
+    kind: 'negatives' as const,
+    testKey: 'x',
+    count: 2,
+    daysApart: 14,
+    daysAfterMasking: 10,
+  }
+  it.each([
+    ['two planned samples far enough apart', [sample('a', 14, 'x'), sample('b', 28, 'x')], 28],
+    [
+      'the second too soon, the third not',
+      [sample('a', 14, 'x'), sample('b', 27, 'x'), sample('c', 30, 'x')],
+      30,
+    ],
+    [
+      'only the last has to lie behind the treatment',
+      [course('t', 20, 20), sample('a', 14, 'x'), sample('b', 29, 'x'), sample('c', 31, 'x')],
+      34,
+    ],
+    ['one planned: another is needed 14 days on', [sample('a', 14, 'x')], 28],
+    [
+      'enough of them, but all too soon after the treatment',
+      [course('t', 25, 25), sample('a', 14, 'x'), sample('b', 28, 'x')],
+      39,
+    ],
+    ['none planned', [], 14],
+  ])('negatives: %s', (_, steps, needed) => {
+    const content = protocol({ steps, policy: { ...defaultClockPolicy, criteria: [two] } })
+    expect(shortestLengthDays(content)).toBe(needed)
+  })
+
   it('counts negatives by their distance from the first sample', () => {
     const criterion = {
       criterionId: 'c',
