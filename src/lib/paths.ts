@@ -12,7 +12,14 @@ export const paths = {
   animal: (accession: string) => `/animals/${part(accession)}`,
 
   water: () => '/water',
+  waterMap: () => '/water/map',
+  newEnclosure: () => '/water/new',
   enclosure: (code: string) => `/enclosures/${part(code)}`,
+  editEnclosure: (code: string) => `/enclosures/${part(code)}/edit`,
+  enclosureMeasure: (code: string) => `/enclosures/${part(code)}/measure`,
+  enclosureReadings: (code: string) => `/enclosures/${part(code)}/readings`,
+  enclosureVolume: (code: string) => `/enclosures/${part(code)}/volume`,
+  enclosureVolumes: (code: string) => `/enclosures/${part(code)}/volumes`,
   system: (code: string) => `/systems/${part(code)}`,
 
   quarantine: () => '/quarantine',

@@ -1,0 +1,30 @@
+import { defineMessages } from './define-messages.ts'
+
+/** Words of the map of the water: bodies, valves, pumps and machines. */
+export const mapWords = defineMessages({
+  title: 'Valves and bodies',
+  source: 'Which bodies share one water now. Water mixes both ways through an open valve and a running pump.',
+  none: 'No body of water is entered yet',
+  between: 'Between waters',
+  newBody: 'New sump or loop',
+  newConnection: 'New valve or pump',
+  newMachine: 'New machine',
+  bodyQuestion: 'Which sump or loop is new?',
+  connectionQuestion: 'Which valve or pump is new?',
+  machineQuestion: 'Which machine is new?',
+  codeHint: 'As painted on it. It never changes.',
+  kind: 'Kind',
+  sump: 'Sump',
+  loop: 'Loop of pipework',
+  valve: 'Valve',
+  pump: 'Pump',
+  from: 'At one end',
+  to: 'At the other end',
+  worksOn: 'Water it works on',
+  stands: 'How it stands now',
+  enter: 'Enter',
+  chooseKind: 'Choose the kind first',
+  chooseEnds: 'Choose both ends first',
+  chooseWater: 'Choose the water first',
+  chooseState: 'Choose how it stands first',
+})

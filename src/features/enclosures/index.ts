@@ -1,0 +1,5 @@
+export { EnclosureForm } from './enclosure-form.tsx'
+export { descriptionOf, emptyFields, fieldsOf } from './enclosure-form-model.ts'
+export type { EnclosureFields } from './enclosure-form-model.ts'
+export { useCorrectEnclosure, useEnterEnclosure, useEnterWaterBody } from './mutations.ts'
+export { enclosureQuery } from './queries.ts'

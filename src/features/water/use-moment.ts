@@ -1,0 +1,14 @@
+import { useState } from 'react'
+import { readingWords } from '../../../shared/messages/reading-words.ts'
+import { instantOfMoment, localMomentOf } from '../../lib/local-moment.ts'
+import { useMe } from '../../lib/me.ts'
+
+/** The "when" of a form: opens on now, facility time, and gives the instant that is meant. */
+export function useMoment() {
+  const { zone } = useMe().facility
+  const [opened] = useState(() => new Date().toISOString())
+  const [moment, setMoment] = useState(() => localMomentOf(opened, zone))
+  // While the minute stands as it opened, the instant is the one of opening, seconds and all
+  const instant = moment === localMomentOf(opened, zone) ? opened : instantOfMoment(moment, zone)
+  return { zone, moment, setMoment, instant, missing: instant === null ? readingWords.typeTime : undefined }
+}

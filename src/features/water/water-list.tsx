@@ -1,0 +1,251 @@
+import { useState } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import { Link } from 'react-router-dom'
+import { Download, Network, Plus } from 'lucide-react'
+import { exportWater } from '../../../shared/contracts/water.contract.ts'
+import type { WaterListRow } from '../../../shared/contracts/water.contract.ts'
+import { volumeStates } from '../../../shared/messages/water.ts'
+import { parameterNames } from '../../../shared/messages/water.ts'
+import { waterWords } from '../../../shared/messages/water-sheet.ts'
+import { addressOf } from '../../lib/api-client.ts'
+import { useFacilityNow } from '../../lib/facility-time.ts'
+import { useListState } from '../../lib/list-state.ts'
+import { useMe } from '../../lib/me.ts'
+import { paths } from '../../lib/paths.ts'
+import { isProblem } from '../../lib/problem-error.ts'
+import { Button } from '../../ui/button.tsx'
+import { ButtonLink } from '../../ui/button-link.tsx'
+import { Cartouche } from '../../ui/cartouche.tsx'
+import { DataTable } from '../../ui/data-table.tsx'
+import type { TableColumn } from '../../ui/data-table-columns.ts'
+import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { Quantity } from '../../ui/quantity.tsx'
+import { SelectField } from '../../ui/select-field.tsx'
+import { Area, Sheet } from '../../ui/sheet.tsx'
+import { TextField } from '../../ui/text-field.tsx'
+import { netVolumeText, volumeUnitOf } from './net-volume.tsx'
+import { waterListQuery } from './queries.ts'
+import type { WaterListQuery } from './queries.ts'
+import { readingText } from './reading-text.ts'
+
+const states = ['outside', 'volume-not-usable', 'life-support-off', 'treatment-vessel'] as const
+const stateWords = () => ({
+  outside: waterWords.stateOutside,
+  'volume-not-usable': waterWords.stateVolume,
+  'life-support-off': waterWords.stateOff,
+  'treatment-vessel': waterWords.stateVessel,
+})
+
+function columnsOf(p: {
+  volumeUnit: string | undefined
+  temperatureUnit: string | undefined
+  nowMs: number
+}): TableColumn<WaterListRow>[] {
+  return [
+    {
+      id: 'code',
+      heading: waterWords.code,
+      sort: true,
+      cell: (row) => (
+        <Link to={paths.enclosure(row.code)} className="t-strong num">
+          {row.code}
+        </Link>
+      ),
+    },
+    {
+      id: 'name',
+      heading: waterWords.name,
+      sort: true,
+      cell: (row) => (row.treatmentVessel ? `${row.name}, ${waterWords.treatmentVessel}` : row.name),
+    },
+    { id: 'area', heading: waterWords.area, sort: true, cell: (row) => row.area },
+    {
+      id: 'connected',
+      heading: waterWords.connected,
+      cell: (row) =>
+        row.volumeState === 'no-water'
+          ? waterWords.noWater
+          : row.connectedCodes.join(', ') || waterWords.alone,
+    },
+    {
+      id: 'volume',
+      heading: waterWords.volume,
+      number: true,
+      sort: true,
+      cell: (row) =>
+        row.netVolumeLitres === null ? (
+          <span className="t-2">{volumeStates[row.volumeState]}</span>
+        ) : (
+          <>
+            <Quantity
+              of={netVolumeText(
+                { netVolumeLitres: row.netVolumeLitres, errorPercent: row.errorPercent },
+                volumeUnitOf(p.volumeUnit),
+              )}
+            />
+            {row.volumeState === 'usable' ? null : (
+              <span className="t-note block">{volumeStates[row.volumeState]}</span>
+            )}
+          </>
+        ),
+    },
+    {
+      id: 'lastReading',
+      heading: waterWords.lastReading,
+      sort: true,
+      cell: (row) =>
+        row.lastReadingAt === null
+          ? waterWords.never
+          : waterWords.ago({ minutes: (p.nowMs - Date.parse(row.lastReadingAt)) / 60_000 }),
+    },
+    {
+      id: 'outside',
+      heading: waterWords.outside,
+      cell: (row) =>
+        row.outside.map((one) => (
+          <span key={one.parameter} className="block text-magenta">
+            {`${parameterNames[one.parameter]} `}
+            <span data-quantity="reading">{readingText(one, p.temperatureUnit).text}</span>
+          </span>
+        )),
+    },
+    { id: 'off', heading: waterWords.off, cell: (row) => row.lifeSupportOff.join(', ') },
+  ]
+}
+
+/** Every enclosure with its water as of now. Search, filters, order and page stand in the address. */
+export function WaterList() {
+  const me = useMe()
+  const list = useListState()
+  const now = useFacilityNow(me.facility.zone)
+  const [typed, setTyped] = useState(list.get('q') ?? '')
+  const filter: WaterListQuery = {
+    q: list.get('q'),
+    area: list.get('area'),
+    state: states.find((state) => state === list.get('state')),
+    sort: (['code', 'name', 'area', 'volume', 'lastReading'] as const).find(
+      (sort) => sort === list.get('sort'),
+    ),
+    direction:
+      list.get('direction') === 'desc' ? 'desc' : list.get('direction') === 'asc' ? 'asc' : undefined,
+  }
+  const query = useQuery(waterListQuery({ ...filter, cursor: list.cursor }))
+  const reply = query.data
+  const mayConfigure = reply?.may.includes('water.configure') ?? false
+  const filtered = Boolean(filter.q ?? filter.area ?? filter.state)
+  const { nextCursor } = reply ?? {}
+
+  return (
+    <Sheet recipe="list">
+      <Area>
+        <Cartouche
+          place={waterWords.title}
+          title={waterWords.listTitle}
+          source={waterWords.listSource({ at: now.time })}
+        />
+        <form
+          className="pane stack"
+          role="search"
+          onSubmit={(event) => {
+            event.preventDefault()
+            list.set({ q: typed.trim() || undefined })
+          }}
+        >
+          <TextField
+            label={waterWords.find}
+            type="search"
+            value={typed}
+            maxLength={200}
+            onChange={(event) => setTyped(event.target.value)}
+            onBlur={() => {
+              if (typed.trim() !== (list.get('q') ?? '')) list.set({ q: typed.trim() || undefined })
+            }}
+          />
+          <SelectField
+            label={waterWords.area}
+            startsEmpty={false}
+            options={[
+              { value: '', label: waterWords.allAreas },
+              ...(reply?.areas ?? []).map((area) => ({ value: area, label: area })),
+            ]}
+            value={filter.area ?? ''}
+            onChange={(event) => list.set({ area: event.target.value })}
+          />
+          <SelectField
+            label={waterWords.state}
+            startsEmpty={false}
+            options={[
+              { value: '', label: waterWords.everyState },
+              ...states.map((state) => ({ value: state, label: stateWords()[state] })),
+            ]}
+            value={filter.state ?? ''}
+            onChange={(event) => list.set({ state: event.target.value })}
+          />
+        </form>
+        <div className="pane stack justify-items-start">
+          {mayConfigure ? (
+            <ButtonLink kind="primary" icon={Plus} to={paths.newEnclosure()}>
+              {waterWords.newEnclosure}
+            </ButtonLink>
+          ) : null}
+          <ButtonLink icon={Network} to={paths.waterMap()}>
+            {waterWords.map}
+          </ButtonLink>
+          <a className="btn" href={addressOf(exportWater, {}, { ...filter })} download>
+            <Download className="icon" aria-hidden="true" />
+            {waterWords.downloadCsv}
+          </a>
+        </div>
+      </Area>
+      <Area className="pane">
+        <DataTable
+          label={waterWords.listTitle}
+          columns={columnsOf({
+            volumeUnit: me.preferences['volumeUnit'],
+            temperatureUnit: me.preferences['temperatureUnit'],
+            nowMs: query.dataUpdatedAt || Date.now(),
+          })}
+          rows={reply?.rows ?? []}
+          rowKey={(row) => row.id}
+          sort={{ column: filter.sort ?? 'code', direction: filter.direction ?? 'asc' }}
+          onSort={({ column, direction }) => list.set({ sort: column, direction })}
+          paging={{
+            kind: 'server',
+            from: list.from,
+            total: reply?.total ?? 0,
+            onBefore: list.before,
+            onNext: nextCursor ? () => list.next(nextCursor, reply?.rows.length ?? 0) : undefined,
+          }}
+          old={isProblem(query.error) && reply !== undefined}
+          above={
+            isProblem(query.error) ? (
+              <ListUnreadable
+                why={query.error.says}
+                code={query.error.requestId}
+                onRetry={() => void query.refetch()}
+              />
+            ) : undefined
+          }
+          instead={
+            query.isPending ? (
+              <ListFetching what={waterWords.enclosures} />
+            ) : reply?.rows.length === 0 ? (
+              <ListEmpty
+                title={filtered ? waterWords.noneTitle : waterWords.noneYetTitle}
+                act={
+                  filtered ? (
+                    <Button onClick={() => list.set({ q: undefined, area: undefined, state: undefined })}>
+                      {waterWords.showAll}
+                    </Button>
+                  ) : undefined
+                }
+              >
+                {filtered ? waterWords.none : waterWords.noneYet}
+              </ListEmpty>
+            ) : undefined
+          }
+        />
+      </Area>
+    </Sheet>
+  )
+}

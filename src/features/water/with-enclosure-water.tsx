@@ -1,0 +1,45 @@
+import type { ReactNode } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
+import { waterWords } from '../../../shared/messages/water-sheet.ts'
+import { paths } from '../../lib/paths.ts'
+import { isProblem } from '../../lib/problem-error.ts'
+import { ButtonLink } from '../../ui/button-link.tsx'
+import { Cartouche } from '../../ui/cartouche.tsx'
+import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { Area, Sheet } from '../../ui/sheet.tsx'
+import { enclosureWaterQuery } from './queries.ts'
+
+/** Reads an enclosure with its water and draws it; until then, or when it cannot be read, says so on the sheet. */
+export function WithEnclosureWater({
+  code,
+  children,
+}: {
+  code: string
+  children: (water: WaterOfEnclosure) => ReactNode
+}) {
+  const query = useQuery(enclosureWaterQuery(code))
+  if (query.data) return children(query.data)
+  const problem = isProblem(query.error) ? query.error : null
+  const isMissing = problem?.code === 'not-found' || problem?.code === 'bad-input'
+  return (
+    <Sheet recipe="list">
+      <Area>
+        <Cartouche place={waterWords.title} title={code} />
+      </Area>
+      <Area className="pane">
+        {problem ? (
+          <ListUnreadable
+            title={isMissing ? waterWords.noSuchEnclosure({ code }) : undefined}
+            why={problem.says}
+            code={problem.requestId}
+            onRetry={() => void query.refetch()}
+            act={<ButtonLink to={paths.water()}>{waterWords.showAll}</ButtonLink>}
+          />
+        ) : (
+          <ListFetching what={code} />
+        )}
+      </Area>
+    </Sheet>
+  )
+}
