@@ -196,6 +196,10 @@ export const recordReadings = contract({
       )
       .min(1, 'Enter at least one reading')
       .max(40)
+      .refine(
+        (list) => new Set(list.map((reading) => reading.id)).size === list.length,
+        'Each reading needs an id of its own',
+      )
       .describe('The readings'),
   }),
   reply: { 201: z.object({ readings: z.array(ReadingRow).describe('As recorded') }) },

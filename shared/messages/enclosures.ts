@@ -53,5 +53,6 @@ export const enclosureFormWords = defineMessages({
   back: 'Back',
   entered: (p: { code: string }) => `${p.code} entered`,
   corrected: (p: { code: string }) => `${p.code} corrected`,
-  readAgain: 'Read what is stored now',
+  storedNow: (p: { field: string; value: string }) => `${p.field}, stored now: ${p.value}`,
+  nothing: 'nothing',
 })

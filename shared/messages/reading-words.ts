@@ -15,6 +15,7 @@ export const readingWords = defineMessages({
   atMost: (p: { high: string }) => `at most ${p.high}`,
   nothingWanted: 'no range is set',
   above: (p: { limit: string; since: string }) => `above ${p.limit} since ${p.since}`,
+  belowSign: 'below',
   below: (p: { limit: string; since: string }) => `below ${p.limit} since ${p.since}`,
   farAbove: (p: { limit: string; since: string }) => `far above, past ${p.limit}, since ${p.since}`,
   farBelow: (p: { limit: string; since: string }) => `far below, past ${p.limit}, since ${p.since}`,
@@ -22,7 +23,8 @@ export const readingWords = defineMessages({
   chartLabel: (p: { parameter: string; days: number; last: string; wanted: string }) =>
     `${p.parameter}, ${String(p.days)} days, last ${p.last}, ${p.wanted}`,
   old: (p: { at: string }) => `last ${p.at}`,
-  setRange: 'Set what is wanted',
+  change: 'change',
+  changeRange: (p: { parameter: string }) => `change what is wanted of ${p.parameter}`,
   rangeQuestion: (p: { parameter: string }) => `What is wanted of ${p.parameter} here?`,
   rangeHint:
     'Beyond an inner limit somebody is warned; beyond an outer one it is urgent. Leave empty what does not exist.',

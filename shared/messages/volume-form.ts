@@ -111,7 +111,7 @@ export const volumeWords = defineMessages({
   waiting: 'waits for a second person',
   confirmedBy: (p: { by: string; on: string }) => `confirmed by ${p.by}, ${p.on}`,
   withdrawnBy: (p: { by: string; reason: string }) => `withdrawn by ${p.by}: ${p.reason}`,
-  foundBy: (p: { by: string; on: string; method: string }) => `${p.by}, ${p.on}, by ${p.method}`,
+  foundBy: (p: { by: string; on: string; method: string }) => `${p.by}, ${p.on}, by ${p.method}.`,
   valvesThen: (p: { list: string }) => `Holds for ${p.list}.`,
   valveOpen: (p: { code: string }) => `${p.code} open`,
   valveShut: (p: { code: string }) => `${p.code} shut`,

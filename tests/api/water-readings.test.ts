@@ -119,6 +119,12 @@ describe('readings', () => {
       body([reading('temperature', '12', 'degC')], { happenedAt: '2026-12-01T18:24:00Z' }),
     )
     expect(skewed.status).toBe(201)
+    // it was entered on a phone whose clock is fast; it counts from now on, not in four minutes
+    const { agent } = await api.as('keeper')
+    const { latest } = (await agent.get('/api/enclosures/KH-1/water').expect(200)).body
+    expect(latest.find((row: { parameter: string }) => row.parameter === 'temperature').value.value).toBe(
+      '12',
+    )
     const nowhere = await post(
       'keeper',
       body([reading('temperature', '12', 'degC')], { waterBodyId: api.nextId() }),

@@ -2,6 +2,7 @@ import type { WaterEventKind } from '../../../shared/domain/places/water-event-k
 import type { PhScale, ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { happenedBy } from '../../platform/database/happened-by.ts'
 
 export interface RecordedReadRow {
   id: string
@@ -50,7 +51,7 @@ export function readLatestReadings(
 ): Promise<ReadingReadRow[]> {
   return db.query(
     `SELECT DISTINCT ON (r.water_body_id, r.parameter) ${readingColumns} FROM ${readingSource}
-      WHERE ($2::uuid[] IS NULL OR r.water_body_id = ANY($2)) AND r.happened_at <= $1 AND v.id IS NULL
+      WHERE ($2::uuid[] IS NULL OR r.water_body_id = ANY($2)) AND ${happenedBy('r', '$1')} AND v.id IS NULL
       ORDER BY r.water_body_id, r.parameter, r.happened_at DESC, r.recorded_at DESC, r.id DESC`,
     [at, waterBodyIds ?? null],
   )
@@ -153,7 +154,7 @@ export function readRangesAt(db: Db, at: Date, enclosureId?: string): Promise<Ra
               r.outer_high_entered_value, r.canonical_unit, r.outer_low, r.inner_low, r.inner_high, r.outer_high,
               r.withdrawn, r.happened_at, p.printed_name AS recorded_by_name
          FROM water_ranges r LEFT JOIN people p ON p.id = r.recorded_by
-        WHERE ($2::uuid IS NULL OR r.enclosure_id = $2) AND r.happened_at <= $1
+        WHERE ($2::uuid IS NULL OR r.enclosure_id = $2) AND ${happenedBy('r', '$1')}
         ORDER BY r.enclosure_id, r.parameter, r.happened_at DESC, r.position DESC) n
       WHERE NOT n.withdrawn ORDER BY n.parameter`,
     [at, enclosureId ?? null],
@@ -187,7 +188,7 @@ export function readWaterEvents(
        JOIN water_bodies b ON b.id = r.water_body_id
        LEFT JOIN life_support_units u ON u.id = r.life_support_unit_id
        ${event.joins}
-      WHERE ${one ? 'r.id = $1' : 'r.water_body_id = ANY($1) AND r.happened_at <= $2'}
+      WHERE ${one ? 'r.id = $1' : `r.water_body_id = ANY($1) AND ${happenedBy('r', '$2')}`}
       ORDER BY r.happened_at DESC, r.id DESC LIMIT ${one ? '1' : '$3'}`,
     one ? [by.id] : [by.waterBodyIds, by.at, by.limit],
   )

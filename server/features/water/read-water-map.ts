@@ -1,5 +1,6 @@
 import type { WaterMap } from '../../../shared/domain/connections/water-map.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { timeSeenAt } from '../../platform/database/happened-by.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { WaterBodyReadRow } from '../enclosures/index.ts'
 import { readConnectionLedger, readConnections, readConnectionStatesAt } from './water-map.reads.ts'
@@ -22,6 +23,7 @@ function mapOf(
   bodies: WaterBodyReadRow[],
   connections: ConnectionReadRow[],
   states: ConnectionStateReadRow[],
+  at?: Date,
 ): WaterMapRows {
   const map: WaterMap = {
     bodies: bodies.map((row) => ({
@@ -41,7 +43,7 @@ function mapOf(
       entryId: row.id,
       connectionId: row.connection_id,
       state: row.open ? ('open' as const) : ('shut' as const),
-      at: row.happened_at.toISOString(),
+      at: (at ? timeSeenAt(row, at) : row.happened_at).toISOString(),
       recordedAt: row.recorded_at.toISOString(),
     })),
   }
@@ -54,6 +56,7 @@ export async function readWaterMapAt(db: Db, at: Date): Promise<WaterMapRows> {
     await placeReads.readWaterBodies(db),
     await readConnections(db),
     await readConnectionStatesAt(db, at),
+    at,
   )
 }
 

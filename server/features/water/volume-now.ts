@@ -3,6 +3,7 @@ import type { Isolation, VolumeChoiceRefusal } from '../../../shared/domain/conn
 import type { ConnectedWater } from '../../../shared/domain/connections/connected-water.ts'
 import type { VolumeDetermination } from '../../../shared/domain/connections/volume-determination.ts'
 import type { Refusal } from '../../../shared/domain/result.ts'
+import { timeSeenAt } from '../../platform/database/happened-by.ts'
 import type { IsolationReadRow, VolumeReadRow } from './volumes.reads.ts'
 
 /** The volume to dose by, or the nearest there is with the reason why it cannot be used. */
@@ -17,7 +18,7 @@ export interface VolumeAt {
   refusal: Refusal<VolumeChoiceRefusal> | null
 }
 
-export const determinationOf = (row: VolumeReadRow): VolumeDetermination => ({
+export const determinationOf = (row: VolumeReadRow, at: Date): VolumeDetermination => ({
   determinationId: row.id,
   waterBodyIds: row.water_body_ids,
   connectionStates: row.valves.map((valve) => ({
@@ -28,14 +29,14 @@ export const determinationOf = (row: VolumeReadRow): VolumeDetermination => ({
   errorPercent: row.error_percent,
   method: row.method,
   displacementSubtracted: row.displacement_subtracted,
-  determinedAt: row.happened_at.toISOString(),
+  determinedAt: timeSeenAt(row, at).toISOString(),
   confirmedAt: row.confirmed_at?.toISOString() ?? null,
 })
 
-export const isolationOf = (row: IsolationReadRow): Isolation => ({
+export const isolationOf = (row: IsolationReadRow, at: Date): Isolation => ({
   isolationId: row.id,
   waterBodyIds: row.water_body_ids,
-  isolatedAt: row.happened_at.toISOString(),
+  isolatedAt: timeSeenAt(row, at).toISOString(),
   isolatedBy: row.recorded_by_name ?? '',
   test:
     row.test_at && row.test_method !== null && row.test_passed !== null
@@ -53,7 +54,7 @@ export function standingIsolations(
   return rows.filter(
     (row) =>
       row.water_body_ids.includes(waterBodyId) &&
-      row.happened_at <= at &&
+      timeSeenAt(row, at) <= at &&
       (row.ended_at === null || row.ended_at > at),
   )
 }
@@ -74,8 +75,8 @@ export function volumeAt(
   const choice = chooseVolume(
     water,
     isolation?.water_body_ids ?? [waterBodyId],
-    rows.map(determinationOf),
-    isolations.map(isolationOf),
+    rows.map((row) => determinationOf(row, at)),
+    isolations.map((row) => isolationOf(row, at)),
   )
   if (choice.ok) {
     const { determination, basis, isolationId } = choice.value
@@ -83,7 +84,7 @@ export function volumeAt(
     return { row, usable: true, holds: true, basis, isolationId, refusal: null }
   }
   const named = choice.refusal.params?.['determinationId']
-  const covering = rows.filter((one) => one.happened_at <= at && one.water_body_ids.includes(waterBodyId))
+  const covering = rows.filter((one) => timeSeenAt(one, at) <= at && one.water_body_ids.includes(waterBodyId))
   return {
     row: rows.find((one) => one.id === named) ?? covering[0] ?? null,
     usable: false,

@@ -1,6 +1,7 @@
 import type { ConnectionKind } from '../../../shared/domain/connections/water-map.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { happenedBy } from '../../platform/database/happened-by.ts'
 
 export interface ConnectionReadRow {
   id: string
@@ -47,7 +48,7 @@ const stateSource = `
 /** The newest entry of every valve and pump at an instant: enough to know the connected water of that instant. */
 export function readConnectionStatesAt(db: Db, at: Date): Promise<ConnectionStateReadRow[]> {
   return db.query(
-    `SELECT DISTINCT ON (s.connection_id) ${stateColumns} FROM ${stateSource} AND s.happened_at <= $1
+    `SELECT DISTINCT ON (s.connection_id) ${stateColumns} FROM ${stateSource} AND ${happenedBy('s', '$1')}
       ORDER BY s.connection_id, s.happened_at DESC, s.recorded_at DESC, s.id DESC`,
     [at],
   )
@@ -84,7 +85,7 @@ export function readLifeSupportAt(
        JOIN water_bodies b ON b.id = u.water_body_id
        LEFT JOIN LATERAL (
          SELECT l.is_on, l.happened_at, l.recorded_by FROM life_support_states l
-          WHERE l.unit_id = u.id AND l.happened_at <= $1
+          WHERE l.unit_id = u.id AND ${happenedBy('l', '$1')}
             AND NOT EXISTS (SELECT 1 FROM water_voids v WHERE v.life_support_state_id = l.id)
           ORDER BY l.happened_at DESC, l.recorded_at DESC, l.id DESC LIMIT 1) s ON true
        LEFT JOIN people p ON p.id = s.recorded_by

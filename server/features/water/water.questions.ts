@@ -104,7 +104,7 @@ function volumeFact(found: EnclosureWater): VolumeFact | null {
     measuredAt: row.happened_at.toISOString(),
     confirmed,
     holdsForThisValveState: holds,
-    mismatches: holds ? [] : findVolumeMismatches(determinationOf(row), found.water),
+    mismatches: holds ? [] : findVolumeMismatches(determinationOf(row, found.at), found.water),
     waterBodyIds: row.water_body_ids,
     isolationId: usable ? isolationId : row.isolation_id,
   }
@@ -141,7 +141,7 @@ function factsOf(found: EnclosureWater): WaterFacts {
       canonicalValue: row.canonical_value,
       canonicalUnit: row.canonical_unit,
       at: row.happened_at.toISOString(),
-      ageMinutes: (at.getTime() - row.happened_at.getTime()) / 60_000,
+      ageMinutes: Math.max(0, at.getTime() - row.happened_at.getTime()) / 60_000,
       waterBodyId: row.water_body_id,
       waterBodyCode: row.water_body_code,
       judgement: judgeReading(

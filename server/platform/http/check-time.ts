@@ -1,12 +1,11 @@
 import { problemTitles } from '../../../shared/messages/problems.ts'
+import { clockSkewMs } from '../database/happened-by.ts'
 import { Problem } from './problem.ts'
-
-const allowedAheadMs = 5 * 60_000
 
 /** The time a person gave as a Date; refused when it lies more than 5 min ahead of the server's clock. */
 export function timeNotAhead(given: string, now: Date, pointer = '/happenedAt'): Date {
   const at = new Date(given)
-  if (at.getTime() > now.getTime() + allowedAheadMs)
+  if (at.getTime() > now.getTime() + clockSkewMs)
     throw new Problem('in-the-future', {
       errors: [{ pointer, detail: problemTitles['in-the-future'], code: 'in-the-future' }],
     })

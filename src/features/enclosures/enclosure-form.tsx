@@ -29,6 +29,7 @@ export function EnclosureForm({
   codeIsFixed,
   act,
   backTo,
+  storedNow = [],
   onSend,
 }: {
   title: string
@@ -36,6 +37,8 @@ export function EnclosureForm({
   codeIsFixed: boolean
   act: string
   backTo: string
+  /** What somebody else saved meanwhile, where it differs; saving again puts this form's text over it. */
+  storedNow?: readonly string[]
   onSend: (fields: EnclosureFields) => Promise<void>
 }) {
   const form = useForm<EnclosureFields>({ defaultValues: start })
@@ -70,6 +73,13 @@ export function EnclosureForm({
       <Area className="pane">
         <form className="tank-form" noValidate onSubmit={(event) => void send(event)}>
           <WrongSummary fields={[]} general={errors.root?.message} />
+          {storedNow.length > 0 ? (
+            <ul className="list-disc pl-5">
+              {storedNow.map((line) => (
+                <li key={line}>{line}</li>
+              ))}
+            </ul>
+          ) : null}
           <TextField
             label={enclosureFormWords.code}
             hint={codeIsFixed ? enclosureFormWords.codeFixed : enclosureFormWords.codeHint}

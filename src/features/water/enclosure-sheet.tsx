@@ -5,6 +5,7 @@ import { Pencil, Plus } from 'lucide-react'
 import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { enclosureKindNames } from '../../../shared/messages/enclosures.ts'
+import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
@@ -19,6 +20,7 @@ import { EventRows } from './event-rows.tsx'
 import { IsolationRows } from './isolation-rows.tsx'
 import { LifeSupportRows } from './life-support-rows.tsx'
 import { NetVolume } from './net-volume.tsx'
+import { orderedWaters } from './ordered-waters.ts'
 import { ReadingsPane } from './readings-pane.tsx'
 import { ValveRows } from './valve-rows.tsx'
 import { Worksheet } from './worksheet.tsx'
@@ -45,7 +47,8 @@ export function EnclosureSheet({
   const { zone } = me.facility
   const [recording, setRecording] = useState(false)
   const sayWhen = (at: string) => sayMoment(at, zone, water.asOf)
-  const { enclosure, bodies } = water
+  const { enclosure } = water
+  const bodies = orderedWaters([water.bodies])[0] ?? []
   const mayRecord = water.may.includes('water.record')
   const mayConfigure = water.may.includes('water.configure')
   const mayPropose = decide('water.configure', me.roles).allowed
@@ -92,6 +95,16 @@ export function EnclosureSheet({
               </>
             }
           />
+          {mayRecord && hasWater ? (
+            <div className="phone-acts">
+              <ButtonLink kind="primary" size="touch" icon={Plus} to={paths.enclosureMeasure(enclosure.code)}>
+                {readingWords.add}
+              </ButtonLink>
+              <Button size="touch" onClick={() => setRecording(true)}>
+                {waterWords.recordEvent}
+              </Button>
+            </div>
+          ) : null}
           <NetVolume water={water} zone={zone} volumeUnit={me.preferences['volumeUnit']} />
         </div>
         {hasWater ? (

@@ -144,7 +144,7 @@ export function EventDialog({
           />
         ) : null}
         <MomentAndNote
-          zone={when.zone}
+          inWords={when.inWords}
           moment={when.moment}
           onMoment={when.setMoment}
           momentWrong={when.missing ?? refusal.at('/happenedAt')}

@@ -1,19 +1,19 @@
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
-import { sayOffset } from '../../../shared/messages/say-date.ts'
 import { MomentField } from '../../ui/moment-field.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 
 /** When something happened, and a note: the two fields that every entry of a ledger ends with. */
 export function MomentAndNote({
-  zone,
   moment,
+  inWords,
   onMoment,
   momentWrong,
   note,
   onNote,
 }: {
-  zone: string
   moment: string
+  /** The moment in words, below the control. */
+  inWords: string | undefined
   onMoment: (next: string) => void
   momentWrong?: string | undefined
   /** Left out: this entry has no note. */
@@ -24,7 +24,7 @@ export function MomentAndNote({
     <>
       <MomentField
         label={waterWords.when}
-        hint={waterWords.whenHint({ offset: sayOffset(new Date().toISOString(), zone) })}
+        hint={inWords}
         wrong={momentWrong}
         value={moment}
         onChange={onMoment}

@@ -3,7 +3,6 @@ import { Link, useNavigate } from 'react-router-dom'
 import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
 import { parameterOf, readingParameters } from '../../../shared/domain/readings/parameters.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
-import { parameterNames } from '../../../shared/messages/water.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { newId } from '../../lib/new-id.ts'
@@ -27,10 +26,9 @@ import { emptyField, entryUnitsOf, judgeField, pointerOf, readingsBody } from '.
 import type { ReadingField } from './reading-form-model.ts'
 import { rangeText, readingText } from './reading-text.ts'
 import { useMoment } from './use-moment.ts'
+import { parameterHeading } from './parameter-heading.ts'
 
 const usual: readonly ReadingParameter[] = ['temperature', 'dissolved-oxygen', 'ph']
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
-
 /** Readings entered at the tank: one field a parameter, with what is wanted and what it was last time beside it. */
 export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
   const { code, waterBodyId } = water.enclosure
@@ -109,6 +107,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
             ) : null}
             <MomentField
               label={waterWords.when}
+              hint={when.inWords}
               value={when.moment}
               onChange={when.setMoment}
               wrong={when.missing ?? refusal.at('/happenedAt')}
@@ -141,7 +140,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
                 label={readingWords.anotherParameter}
                 options={others.map((parameter) => ({
                   value: parameter,
-                  label: capital(parameterNames[parameter]),
+                  label: parameterHeading(parameter),
                 }))}
                 value=""
                 onChange={(event) => setFields([...fields, fieldFor(event.target.value as ReadingParameter)])}
@@ -201,7 +200,7 @@ function OneReading({
   return (
     <div className="stack gap-1">
       <QuantityField
-        label={capital(parameterNames[field.parameter])}
+        label={parameterHeading(field.parameter)}
         units={entryUnitsOf(field.parameter)}
         allowNegative={parameterOf(field.parameter).least < 0}
         quantity={{ value: field.value, unit: field.unit }}

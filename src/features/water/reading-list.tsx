@@ -28,8 +28,7 @@ import { useVoidRecord } from './mutations.ts'
 import { readingListQuery } from './queries.ts'
 import { readingText } from './reading-text.ts'
 import { StrikeDialog } from './strike-dialog.tsx'
-
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
+import { parameterHeading } from './parameter-heading.ts'
 
 function columnsOf(
   zone: string,
@@ -46,7 +45,7 @@ function columnsOf(
     {
       id: 'parameter',
       heading: readingWords.parameter,
-      cell: (row) => capital(parameterNames[row.parameter]),
+      cell: (row) => parameterHeading(row.parameter),
     },
     {
       id: 'value',
@@ -132,7 +131,7 @@ export function ReadingList({ code }: { code: string }) {
             startsEmpty={false}
             options={[
               { value: '', label: readingWords.allParameters },
-              ...readingParameters.map((value) => ({ value, label: capital(parameterNames[value]) })),
+              ...readingParameters.map((value) => ({ value, label: parameterHeading(value) })),
             ]}
             value={filter.parameter ?? ''}
             onChange={(event) => list.set({ parameter: event.target.value })}

@@ -1,14 +1,11 @@
-import { SlidersHorizontal } from 'lucide-react'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { Range, ReadingRow } from '../../../shared/contracts/water-facts.ts'
 import { parameterNames } from '../../../shared/messages/water.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
-import { Button } from '../../ui/button.tsx'
 import { outsideSince, readingChart } from './reading-chart-model.ts'
 import type { ReadingChart } from './reading-chart-model.ts'
 import { passedLimitText, rangeText, readingText } from './reading-text.ts'
-
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
+import { parameterHeading } from './parameter-heading.ts'
 
 export interface ReadingMultipleProps {
   parameter: ReadingParameter
@@ -28,7 +25,7 @@ export interface ReadingMultipleProps {
 export function ReadingMultiple(props: ReadingMultipleProps) {
   const { parameter, rows, latest, range, days, nowMs, temperatureUnit, sayWhen, onSetRange } = props
   const chart = readingChart(rows, range, nowMs - days * 86_400_000, nowMs)
-  const name = capital(parameterNames[parameter])
+  const name = parameterHeading(parameter)
   const shown = latest ? readingText(latest, temperatureUnit) : null
   const wanted = rangeText(range, temperatureUnit)
   const outside = latest?.judgement.level === 'inner' || latest?.judgement.level === 'outer'
@@ -39,7 +36,7 @@ export function ReadingMultiple(props: ReadingMultipleProps) {
         {shown ? (
           <b data-quantity="reading" className={outside ? 'text-magenta' : undefined}>
             {shown.number}
-            {shown.symbol && shown.symbol !== 'pH' ? <i>{`\u00a0${shown.symbol}`}</i> : null}
+            {shown.symbol && parameter !== 'ph' ? <i>{`\u00a0${shown.symbol}`}</i> : null}
           </b>
         ) : null}
       </figcaption>
@@ -53,15 +50,21 @@ export function ReadingMultiple(props: ReadingMultipleProps) {
         })}
       />
       <p className="t-note small-multiple-note">
-        <span>{noteOf(props, outside, wanted)}</span>
-        {latest ? <span>{sayWhen(latest.happenedAt)}</span> : null}
+        <span>
+          {noteOf(props, outside, wanted)}
+          {onSetRange ? (
+            <button
+              type="button"
+              className="small-multiple-set"
+              aria-label={readingWords.changeRange({ parameter: parameterNames[parameter] })}
+              onClick={onSetRange}
+            >
+              {readingWords.change}
+            </button>
+          ) : null}
+        </span>
+        {latest ? <span className="num">{sayWhen(latest.happenedAt)}</span> : null}
       </p>
-      {onSetRange ? (
-        <Button size="small" kind="plain" icon={SlidersHorizontal} onClick={onSetRange}>
-          {readingWords.setRange}
-          <span className="visually-hidden">{`, ${parameterNames[parameter]}`}</span>
-        </Button>
-      ) : null}
     </figure>
   )
 }

@@ -1,12 +1,10 @@
 import { formatReading } from '../../../shared/domain/quantities/format-reading.ts'
-import { parameterOf } from '../../../shared/domain/readings/parameters.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Range, ReadingRow } from '../../../shared/contracts/water-facts.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
-import { convert } from '../../../shared/domain/units/convert.ts'
 
 /** A figure of a reading, for drawing: the sign for "below", number and unit apart and together. */
 export interface ReadingText {
@@ -35,7 +33,7 @@ export function readingText(
   const { value, unit } = row.value
   if (!isUnitCode(unit)) return { number: value, symbol: unit, text: `${value}${noBreak}${unit}` }
   const formatted = formatReading({ value, unit }, shownUnit(row.parameter, unit, temperatureUnit))
-  const sign = row.below ? `below${noBreak}` : ''
+  const sign = row.below ? `${readingWords.belowSign}${noBreak}` : ''
   return { number: `${sign}${formatted.number}`, symbol: formatted.symbol, text: `${sign}${formatted.text}` }
 }
 
@@ -55,7 +53,11 @@ export function rangeText(range: Range | undefined, temperatureUnit?: string): s
   const of = (entered: string) => limitText(range, entered, temperatureUnit)
   if (low !== null && high !== null) {
     const [from, to] = [of(low), of(high)]
-    const words = readingWords.between({ low: from.number, high: to.text })
+    // a scale such as pH is named before its number: "pH 7.90 to 8.40"
+    const isNamedFirst = to.text.startsWith(to.symbol)
+    const words = isNamedFirst
+      ? readingWords.between({ low: from.text, high: to.number })
+      : readingWords.between({ low: from.number, high: to.text })
     return readingWords.wanted({ range: words })
   }
   if (low !== null) return readingWords.wanted({ range: readingWords.atLeast({ low: of(low).text }) })
@@ -74,12 +76,4 @@ export function passedLimitText(
   const entered =
     range.entered[judgement.level === 'outer' ? (`outer${side}` as const) : (`inner${side}` as const)]
   return entered === null ? '' : limitText(range, entered, temperatureUnit).text
-}
-
-/** A canonical figure with the usual places of the parameter, in its canonical unit: for axes and comparisons. */
-export function canonicalText(parameter: ReadingParameter, value: number, unit: string): string {
-  const { places } = parameterOf(parameter)
-  const same = isUnitCode(unit) ? convert(value, unit, unit) : null
-  if (!isUnitCode(unit) || !same?.ok) return `${String(value)}${noBreak}${unit}`
-  return formatReading({ value: value.toFixed(places), unit }).text
 }

@@ -77,7 +77,7 @@ export function StateDialog({
         <WrongSummary fields={[]} general={refused} />
         {children}
         <MomentAndNote
-          zone={when.zone}
+          inWords={when.inWords}
           moment={when.moment}
           onMoment={when.setMoment}
           momentWrong={when.missing}

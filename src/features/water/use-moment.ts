@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import { sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { instantOfMoment, localMomentOf } from '../../lib/local-moment.ts'
 import { useMe } from '../../lib/me.ts'
@@ -10,5 +11,13 @@ export function useMoment() {
   const [moment, setMoment] = useState(() => localMomentOf(opened, zone))
   // While the minute stands as it opened, the instant is the one of opening, seconds and all
   const instant = moment === localMomentOf(opened, zone) ? opened : instantOfMoment(moment, zone)
-  return { zone, moment, setMoment, instant, missing: instant === null ? readingWords.typeTime : undefined }
+  return {
+    zone,
+    moment,
+    setMoment,
+    instant,
+    missing: instant === null ? readingWords.typeTime : undefined,
+    /** The moment in words: browsers write days and months in either order. */
+    inWords: instant === null ? undefined : sayInstantWithOffset(instant, zone),
+  }
 }

@@ -49,7 +49,7 @@ export function ValveRows({
               <small>{waterWords.joins({ from: row.fromCode, to: row.toCode })}</small>
             </span>
             <span>
-              <Tag kind={row.state === 'open' ? 'solid' : 'plain'}>{connectionWord(row)}</Tag>
+              <Tag kind={row.state === 'unknown' ? 'solid' : 'plain'}>{connectionWord(row)}</Tag>
               <small>
                 {row.since
                   ? waterWords.sinceBy({ at: sayWhen(row.since), by: row.by ?? '' })

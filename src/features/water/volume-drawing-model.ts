@@ -21,6 +21,8 @@ export interface DrawnPart {
   /** "1.20 m wide", inside. */
   otherText: string
   depthText: string
+  /** All measures in one line, for a part without dimension lines: "1.10 × 0.60 × 0.40 m". */
+  allText: string
   litresText: string
   /** A cone below the straight wall. */
   cone: boolean
@@ -95,6 +97,18 @@ function textsOf(shape: TankShape): { across: string; other: string; depth: stri
   }
 }
 
+function allMeasures(shape: TankShape, texts: ReturnType<typeof textsOf>): string {
+  if (shape.shape !== 'rectangular')
+    return [texts.across, texts.other, texts.depth && waterWords.depthOf({ depth: texts.depth })]
+      .filter(Boolean)
+      .join(', ')
+  const { length, width, depth } = shape
+  const sameUnit = length.unit === width.unit && width.unit === depth.unit
+  return sameUnit
+    ? `${length.value} × ${width.value} × ${texts.depth}`
+    : [texts.across, measureText(width), texts.depth].join(' × ')
+}
+
 /**
  * The section drawing of a worksheet by inside measures.
  *
@@ -124,6 +138,7 @@ export function volumeDrawing(sheet: VolumeSheet, working: readonly WorkingLine[
         acrossText: texts.across,
         otherText: texts.other,
         depthText: texts.depth,
+        allText: allMeasures(part.shape, texts),
         litresText: litresOf(part.key),
         cone: part.shape.shape === 'cone-bottom',
       }
@@ -134,9 +149,7 @@ export function volumeDrawing(sheet: VolumeSheet, working: readonly WorkingLine[
   const pipeLitres = working.filter((line) => sheet.pipes.some((one) => one.key === line.key))
   const allTanks = drawn(tanks, across)
   const allSumps = drawn(sumps, sumpWidth)
-  const inWords = [...allTanks, ...allSumps]
-    .map((part) => [part.name, part.acrossText, part.otherText, part.depthText].filter(Boolean).join(' '))
-    .join('; ')
+  const inWords = [...allTanks, ...allSumps].map((part) => `${part.name} ${part.allText}`).join('; ')
   return {
     tanks: allTanks,
     sumps: allSumps,

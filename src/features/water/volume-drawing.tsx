@@ -40,11 +40,18 @@ export function VolumeDrawing({
       <text x="60" y="20" className="is-small">
         {waterWords.notToScale}
       </text>
-      {first?.acrossText ? <Across part={first} /> : null}
+      {first?.acrossText && tanks.length === 1 ? <Across part={first} /> : null}
       {tanks.map((part, i) => (
-        <Tank key={part.key} part={part} displaced={i === 0 ? displacedText : null} />
+        <Tank
+          key={part.key}
+          part={part}
+          isOnly={tanks.length === 1}
+          displaced={i === 0 ? displacedText : null}
+        />
       ))}
-      {last?.depthText ? <Depth x={last.x + last.width + 30} text={last.depthText} /> : null}
+      {last?.depthText && tanks.length === 1 ? (
+        <Depth x={last.x + last.width + 30} text={last.depthText} />
+      ) : null}
       {pipeText ? (
         <>
           <path d={pipePath(tanks, sumps)} className="p-line" />
@@ -103,7 +110,7 @@ function Depth({ x, text }: { x: number; text: string }) {
   )
 }
 
-function Tank({ part, displaced }: { part: DrawnPart; displaced: string | null }) {
+function Tank({ part, isOnly, displaced }: { part: DrawnPart; isOnly: boolean; displaced: string | null }) {
   const { x, width, cone } = part
   const end = x + width
   const bottom = cone ? `L${x + width / 2} ${floor}L${end} ${floor - 44}` : `V${floor}H${end}`
@@ -114,7 +121,7 @@ function Tank({ part, displaced }: { part: DrawnPart; displaced: string | null }
       <path d={`M${x} 62V${wall}${bottom}V62`} className="wall" />
       <path d={`M${x} ${surface}H${end}`} className="surface" />
       <path d={`M${end - 18} ${surface - 8}l6 -8h-12z`} className="p-ink" />
-      {displaced && width > 200 ? (
+      {displaced && width > 300 ? (
         <>
           <path
             d={`M${x + 70} ${floor}V${floor - 24}a20 20 0 0 1 40 0V${floor}M${x + 172} ${floor}V${floor - 24}a20 20 0 0 1 40 0V${floor}`}
@@ -127,9 +134,14 @@ function Tank({ part, displaced }: { part: DrawnPart; displaced: string | null }
       ) : null}
       <text x={x + 20} y="118">
         <tspan className="is-strong">{part.name}</tspan>
-        {width > 150 ? `  ${part.otherText}` : ''}
+        {isOnly ? `  ${part.otherText}` : ''}
       </text>
-      <text x={x + 20} y="136" className="is-small">
+      {isOnly || width < 150 ? null : (
+        <text x={x + 20} y="136" className="is-small">
+          {part.allText}
+        </text>
+      )}
+      <text x={x + 20} y={isOnly ? 136 : 154} className="is-small">
         {part.litresText}
       </text>
     </>
@@ -145,7 +157,7 @@ function Sump({ part }: { part: DrawnPart }) {
       <path d={`M${x} ${sumpSurface}H${x + width}`} className="surface" />
       <text x={x + 16} y="326">
         <tspan className="is-strong">{part.name}</tspan>
-        {`  ${part.acrossText}`}
+        {`  ${part.allText}`}
       </text>
       <text x={x + 16} y="344" className="is-small">
         {`+ ${part.litresText}`}

@@ -138,7 +138,7 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
             />
           ) : null}
           <MomentAndNote
-            zone={when.zone}
+            inWords={when.inWords}
             moment={when.moment}
             onMoment={when.setMoment}
             momentWrong={when.missing ?? refusal.at('/happenedAt')}

@@ -16,6 +16,7 @@ import { Cartouche } from '../../ui/cartouche.tsx'
 import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { BodyDialog, ConnectionDialog, MachineDialog } from './map-dialogs.tsx'
+import { orderedWaters } from './ordered-waters.ts'
 import { waterMapQuery } from './queries.ts'
 import { ValveRows } from './valve-rows.tsx'
 
@@ -29,7 +30,7 @@ export function WaterMapSheet() {
   const map = query.data
   const sayWhen = (at: string) => sayMoment(at, me.facility.zone, map?.asOf ?? at)
   const bodyOf = new Map((map?.bodies ?? []).map((body) => [body.id, body]))
-  const waters = (map?.waters ?? []).map((ids) => ids.flatMap((id) => bodyOf.get(id) ?? []))
+  const waters = orderedWaters((map?.waters ?? []).map((ids) => ids.flatMap((id) => bodyOf.get(id) ?? [])))
   const back = () => setAsked(null)
 
   return (
