@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { TransactionKind } from '../../../shared/domain/register/transaction-kinds.ts'
 import type { Db } from '../../platform/database/db.ts'
 
@@ -84,7 +85,7 @@ export async function readTransactions(
   filter: TransactionFilter,
 ): Promise<{ rows: TransactionListRow[]; total: number }> {
   const values = [
-    filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+    containing(filter.q),
     filter.way ?? null,
     filter.kind ?? null,
     filter.voided === undefined ? null : filter.voided === 'yes',

@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { LifeStage } from '../../../shared/domain/animals/description.ts'
 import type { SourceMark } from '../../../shared/domain/sources.ts'
 import type { SensitivityCode, SensitivityLevel } from '../../../shared/domain/taxa/sensitivity.ts'
@@ -84,7 +85,7 @@ export function readTaxa(db: Db, filter: TaxaFilter): Promise<TaxonReadRow[]> {
       ORDER BY ${sortColumns[filter.sort ?? 'commonName']} ${direction}, t.id LIMIT $5 OFFSET $6`,
     [
       filter.ids ?? null,
-      filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+      containing(filter.q),
       filter.group ?? null,
       filter.kind ?? null,
       filter.limit ?? null,

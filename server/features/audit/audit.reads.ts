@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
 
 export interface AuditRow {
@@ -37,7 +38,7 @@ export async function readAudit(
   const values = [
     scope.ownOf,
     scope.clinical,
-    filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+    containing(filter.q),
     filter.subjectKind ?? null,
     filter.subjectId ?? null,
   ]

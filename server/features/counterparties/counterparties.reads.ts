@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { CounterpartyKind } from '../../../shared/domain/register/counterparty-kinds.ts'
 import type { Db } from '../../platform/database/db.ts'
 
@@ -39,7 +40,7 @@ export async function readCounterparties(
   filter: CounterpartyFilter,
 ): Promise<{ rows: CounterpartyReadRow[]; total: number }> {
   const where = `$1::text IS NULL OR c.name ILIKE $1 OR c.registration ILIKE $1 OR c.address ILIKE $1`
-  const values = [filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null]
+  const values = [containing(filter.q)]
   const column = filter.sort === 'transactions' ? 'transactions' : 'lower(c.name)'
   const order = `${column} ${filter.direction === 'desc' ? 'DESC' : 'ASC'}, c.id`
   const rows: CounterpartyReadRow[] = await db.query(

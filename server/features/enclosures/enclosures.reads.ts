@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { WaterBodyKind } from '../../../shared/domain/connections/water-map.ts'
 import type { EnclosureKind } from '../../../shared/domain/places/enclosure-kind.ts'
 import type { Db } from '../../platform/database/db.ts'
@@ -61,7 +62,7 @@ const conditions = `
   AND e.in_use_from <= $6 AND (e.in_use_until IS NULL OR e.in_use_until > $6)`
 
 const valuesOf = (filter: EnclosureFilter, at: Date) => [
-  filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+  containing(filter.q),
   filter.kind ?? null,
   filter.area ?? null,
   filter.boundary ?? null,

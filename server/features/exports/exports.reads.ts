@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { ExportFormat } from '../../../shared/domain/register/export-formats.ts'
 import type { Db } from '../../platform/database/db.ts'
 
@@ -44,7 +45,7 @@ export async function readExports(
     ($1::text IS NULL OR x.subject_label ILIKE $1 OR x.reason ILIKE $1 OR p.printed_name ILIKE $1
       OR x.file_name ILIKE $1)
     AND ($2::uuid IS NULL OR x.subject_id = $2)`
-  const values = [filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null, filter.animalId ?? null]
+  const values = [containing(filter.q), filter.animalId ?? null]
   const direction = filter.direction ?? (filter.sort === 'accession' ? 'asc' : 'desc')
   const order = `${filter.sort === 'accession' ? 'x.subject_label' : 'x.exported_at'} ${direction === 'asc' ? 'ASC' : 'DESC'}, x.id`
   const rows: ExportReadRow[] = await db.query(

@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
 
 export interface OrderReadRow {
@@ -58,7 +59,7 @@ export interface OrderFilter {
 
 /** Orders that match, unsorted and unpaged: where they stand is computed, so filter and sort follow in the query module. */
 export function readOrders(db: Db, filter: OrderFilter): Promise<OrderReadRow[]> {
-  const like = filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null
+  const like = containing(filter.q)
   return db.query(
     `SELECT ${columns} ${tables}
       WHERE ($1::text IS NULL OR o.number ILIKE $1 OR c.code ILIKE $1 OR c.name ILIKE $1 OR v.agent ILIKE $1)

@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
 
@@ -97,7 +98,7 @@ export async function readPeople(
           WHERE r.person_id = p.id AND r.role = $2 AND r.withdrawn_at IS NULL))
     AND ($3::boolean IS NULL OR p.active = $3)`
   const values = [
-    filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+    containing(filter.q),
     filter.role ?? null,
     filter.active === undefined ? null : filter.active === 'yes',
   ]

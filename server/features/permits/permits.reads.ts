@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { PermitMark } from '../../../shared/domain/register/judge-permit-use.ts'
 import type { PermitKind } from '../../../shared/domain/register/permit-kinds.ts'
 import { permitWarningDays } from '../../../shared/domain/register/permit-state.ts'
@@ -93,13 +94,7 @@ export async function readPermits(
                   WHERE pt.permit_id = p.id AND (t.common_name ILIKE $1 OR t.scientific_name ILIKE $1)))
     AND ($3::text IS NULL OR $3 = ${stateSql}) AND ($4::text IS NULL OR p.kind = $4)
     AND (NOT $5::boolean OR s.open_marks > 0) AND $2::date IS NOT NULL`
-  const values = [
-    filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
-    on,
-    filter.state ?? null,
-    filter.kind ?? null,
-    filter.open === 'yes',
-  ]
+  const values = [containing(filter.q), on, filter.state ?? null, filter.kind ?? null, filter.open === 'yes']
   const order = `${sortColumns[filter.sort ?? 'validUntil']} ${filter.direction === 'desc' ? 'DESC' : 'ASC'} NULLS LAST, p.id`
   const rows: PermitReadRow[] = await db.query(
     `SELECT ${columns} FROM ${from} WHERE ${where} ORDER BY ${order} LIMIT $6 OFFSET $7`,

@@ -1,3 +1,4 @@
+import { containing } from '../../platform/database/like.ts'
 import type { WaterEventKind } from '../../../shared/domain/places/water-event-kind.ts'
 import type { PhScale, ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -97,7 +98,7 @@ const readingValues = (waterBodyIds: readonly string[], filter: ReadingFilter) =
   filter.from ?? null,
   filter.until ?? null,
   filter.voided === 'with',
-  filter.q ? `%${filter.q.replace(/[\\%_]/g, '\\$&')}%` : null,
+  containing(filter.q),
 ]
 
 /** Readings of these bodies, the newest first unless told; one page, or the first `limit` of them. */
