@@ -1,22 +1,15 @@
 import { z } from 'zod'
-import { animalForms, birthKinds, lifeStages, sexes } from '../domain/animals/description.ts'
-import { sourceCodes } from '../domain/register/permit-kinds.ts'
-import {
-  acquisitionKinds,
-  dispositionKinds,
-  transactionKindNames,
-} from '../domain/register/transaction-kinds.ts'
+import { animalForms } from '../domain/animals/description.ts'
+import { transactionKindNames } from '../domain/register/transaction-kinds.ts'
+import { NewAcquisition, NewDisposition } from './acquisition-bodies.ts'
 import { contract } from './contract.ts'
-import { NewCounterparty } from './counterparties.contract.ts'
 import { AttachedDocument, UploadFields } from './documents.contract.ts'
 import { PermitKindName, PermitMarkName } from './permits.contract.ts'
 import { Instant, listQuery, LocalDate, May, page, Reason, RecordId } from './primitives.ts'
 import {
-  AnimalCount,
   Guarded,
   HumanNumber,
   Named,
-  optionalWords,
   PartialDateText,
   Period,
   Stage,
@@ -26,95 +19,6 @@ import {
 
 const Way = z.enum(['in', 'out']).describe('Into the collection, or out of it')
 const KindName = z.enum(transactionKindNames).describe('Kind of transaction in the trade’s terms')
-const Estimate = z
-  .strictObject({
-    low: z.int().min(0).describe('At least so many'),
-    high: z.int().min(1).describe('At most so many'),
-  })
-  .describe('The number is an estimate and lies between these')
-
-const PlaceGiven = z
-  .strictObject({
-    locality: optionalWords(500, 'Where it was collected, found or released'),
-    on: PartialDateText.nullish().describe('When it was collected, where that differs'),
-    method: optionalWords(200, 'How it was collected'),
-    latitude: z.number().min(-90).max(90).nullish().describe('Decimal degrees, WGS 84'),
-    longitude: z.number().min(-180).max(180).nullish().describe('Decimal degrees, WGS 84'),
-    uncertaintyMetres: z.number().positive().max(1e7).nullish().describe('Radius of uncertainty in metres'),
-  })
-  .describe('Where the animals were collected, found or released')
-
-const TransportGiven = z
-  .strictObject({
-    carrier: optionalWords(200, 'Who carried them'),
-    waybill: optionalWords(100, 'Number of the waybill'),
-    boxCount: z.int().min(1).max(10_000).nullish().describe('Number of boxes'),
-    sealedAt: Instant.nullish().describe('When the boxes were sealed'),
-    openedAt: Instant.nullish().describe('When they were opened'),
-    note: optionalWords(2000, 'Water, temperature, packing'),
-  })
-  .describe('How the animals travelled')
-
-const shared = {
-  id: RecordId,
-  stage: Stage,
-  on: PartialDateText,
-  time: TimeOfDay.nullish().describe('Local time of day, where the date is exact and the time is known'),
-  counterpartyId: RecordId.nullish().describe('The other party'),
-  newCounterparty: NewCounterparty.nullish().describe('The other party, entered with the transaction'),
-  reference: optionalWords(120, 'Number on the other party’s paper: invoice, agreement, transfer form'),
-  place: PlaceGiven.nullish().describe('Where the animals were collected, found or released'),
-  transport: TransportGiven.nullish().describe('How the animals travelled'),
-  loanDueOn: LocalDate.nullish().describe('Last day of a loan'),
-  note: optionalWords(4000, 'Note'),
-  permitUses: z
-    .array(
-      z
-        .strictObject({
-          id: RecordId,
-          permitId: RecordId.describe('The permit'),
-          lineId: RecordId.describe('The line it is used for'),
-          quantity: AnimalCount.describe('Whole animals taken under it'),
-        })
-        .describe('A use of a permit'),
-    )
-    .max(100)
-    .describe('What is taken under which permit'),
-}
-
-const NewAnimal = z
-  .strictObject({
-    record: z.literal('new').describe('An animal or group new to the collection'),
-    id: RecordId.describe('Id of the line'),
-    animalId: RecordId.describe('Id of the new animal or group'),
-    taxonId: RecordId.describe('Its taxon'),
-    form: z.enum(animalForms).describe('An individual, or a group managed as one'),
-    name: optionalWords(100, 'House name'),
-    sex: z.enum(sexes).describe('Sex'),
-    lifeStage: z.enum(lifeStages).describe('Stage of life'),
-    birthKind: z.enum(birthKinds).nullish().describe('How it came into being'),
-    birthDate: PartialDateText.nullish().describe('When'),
-    birthApproximate: z.boolean().optional().describe('The date is an estimate'),
-    count: AnimalCount.describe('Animals alive on arrival; 1 for an individual'),
-    estimate: Estimate.nullish().describe('Set where the number is an estimate'),
-    enclosureId: RecordId.describe('Enclosure they go into'),
-    deadOnArrival: z.int().min(0).max(1_000_000).nullish().describe('Dead in the boxes, never accessioned'),
-    theirNumber: optionalWords(100, 'Number it had with the other party'),
-    sourceCode: z.enum(sourceCodes).nullish().describe('Letter of the source'),
-  })
-  .describe('A new animal or group')
-
-const AddedToGroup = z
-  .strictObject({
-    record: z.literal('existing').describe('Added to a group that is already here'),
-    id: RecordId.describe('Id of the line'),
-    animalId: RecordId.describe('The group'),
-    count: AnimalCount.describe('Animals added, alive'),
-    deadOnArrival: z.int().min(0).max(1_000_000).nullish().describe('Dead in the boxes, never accessioned'),
-    sourceCode: z.enum(sourceCodes).nullish().describe('Letter of the source'),
-  })
-  .describe('Animals added to a group')
-
 const Line = z.object({
   id: RecordId,
   animalId: RecordId.describe('The animal or group'),
@@ -278,15 +182,7 @@ export const recordAcquisition = contract({
   path: '/register/acquisitions',
   action: 'register.manage',
   summary: 'Accession animals: from whom, when, under which permits, into which enclosures',
-  body: z.strictObject({
-    ...shared,
-    kind: z.enum(acquisitionKinds).describe('How they came'),
-    lines: z
-      .array(z.discriminatedUnion('record', [NewAnimal, AddedToGroup]))
-      .min(1, 'Name at least one animal or group')
-      .max(50)
-      .describe('The animals and groups'),
-  }),
+  body: NewAcquisition,
   reply: { 201: Transaction },
   problems: [
     'id-already-used',
@@ -296,6 +192,7 @@ export const recordAcquisition = contract({
     'name-already-used',
     'not-a-group',
     'enclosure-not-in-use',
+    'mark-already-carried',
   ],
   idempotent: 'by-record-id',
 })
@@ -306,23 +203,7 @@ export const recordDisposition = contract({
   path: '/register/dispositions',
   action: 'register.manage',
   summary: 'Record that animals left: to whom, when, under which permits',
-  body: z.strictObject({
-    ...shared,
-    kind: z.enum(dispositionKinds).describe('How they left'),
-    lines: z
-      .array(
-        z
-          .strictObject({
-            id: RecordId.describe('Id of the line'),
-            animalId: RecordId.describe('The animal or group'),
-            count: AnimalCount.describe('Animals that left; 1 for an individual'),
-          })
-          .describe('Animals that left'),
-      )
-      .min(1, 'Name at least one animal or group')
-      .max(50)
-      .describe('The animals and groups'),
-  }),
+  body: NewDisposition,
   reply: { 201: Transaction },
   problems: [
     'id-already-used',

@@ -127,27 +127,30 @@ export const getPermit = contract({
   problems: ['not-found'],
 })
 
+/** A permit as the registrar enters it. */
+export const NewPermit = z.strictObject({
+  id: RecordId,
+  permitNumber: words(120).describe('Number printed on the permit'),
+  authority: words(200).describe('Authority that gave it'),
+  kind: PermitKindName,
+  validFrom: LocalDate.describe('First day of validity'),
+  validUntil: LocalDate.describe('Last day of validity'),
+  quantityAllowed: AnimalCount.nullish().describe(
+    'Whole animals it allows; absent where no number is stated',
+  ),
+  taxonIds: z.array(RecordId).max(50).describe('Taxa it is restricted to; empty: none is named'),
+  counterpartyId: RecordId.nullish().describe('Party it was given to or names'),
+  purposeCode: z.enum(purposeCodes).nullish().describe('Letter of the purpose'),
+  conditions: optionalWords(4000, 'Conditions in words'),
+})
+
 export const enterPermit = contract({
   id: 'enterPermit',
   method: 'post',
   path: '/register/permits',
   action: 'register.manage',
   summary: 'Enter a permit as it is printed; a wrong one is voided and entered again',
-  body: z.strictObject({
-    id: RecordId,
-    permitNumber: words(120).describe('Number printed on the permit'),
-    authority: words(200).describe('Authority that gave it'),
-    kind: PermitKindName,
-    validFrom: LocalDate.describe('First day of validity'),
-    validUntil: LocalDate.describe('Last day of validity'),
-    quantityAllowed: AnimalCount.nullish().describe(
-      'Whole animals it allows; absent where no number is stated',
-    ),
-    taxonIds: z.array(RecordId).max(50).describe('Taxa it is restricted to; empty: none is named'),
-    counterpartyId: RecordId.nullish().describe('Party it was given to or names'),
-    purposeCode: z.enum(purposeCodes).nullish().describe('Letter of the purpose'),
-    conditions: optionalWords(4000, 'Conditions in words'),
-  }),
+  body: NewPermit,
   reply: { 201: Permit },
   problems: ['id-already-used', 'number-already-used', 'period-reversed', 'not-found'],
   idempotent: 'by-record-id',

@@ -90,6 +90,7 @@ export const portTitles = defineMessages({
 /** Words of a history, on the screen and on the page alike. */
 export const historyWords = defineMessages({
   title: 'Acquisition history',
+  titled: (p: { accession: string }) => `Acquisition history of ${p.accession}`,
   heldAs: 'Held as',
   owned: 'owned',
   'loan-in': 'on loan in',

@@ -40,6 +40,18 @@ const sheetRoutes: RouteObject[] = [
   { path: 'settings/people/:id', lazy: () => import('./routes/person.tsx') },
   { path: 'settings/facility', lazy: () => import('./routes/facility-settings.tsx') },
   { path: 'settings/audit', lazy: () => import('./routes/audit.tsx') },
+  { path: 'register', lazy: () => import('./routes/register/transactions.tsx') },
+  { path: 'register/acquisitions/new', lazy: () => import('./routes/register/new-acquisition.tsx') },
+  { path: 'register/dispositions/new', lazy: () => import('./routes/register/new-disposition.tsx') },
+  { path: 'register/transactions/:number', lazy: () => import('./routes/register/transaction.tsx') },
+  { path: 'register/histories/:accession', lazy: () => import('./routes/register/history.tsx') },
+  { path: 'register/permits', lazy: () => import('./routes/register/permits.tsx') },
+  { path: 'register/permits/new', lazy: () => import('./routes/register/new-permit.tsx') },
+  { path: 'register/permits/:number', lazy: () => import('./routes/register/permit.tsx') },
+  { path: 'register/exports', lazy: () => import('./routes/register/exports.tsx') },
+  { path: 'register/parties', lazy: () => import('./routes/register/parties.tsx') },
+  { path: 'check', lazy: () => import('./routes/check.tsx') },
+  { path: 'check/:fingerprint', lazy: () => import('./routes/check.tsx') },
 ]
 
 /** The routes of the whole client. */

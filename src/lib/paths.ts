@@ -37,7 +37,14 @@ export const paths = {
   controlled: () => '/pharmacy/controlled',
 
   register: () => '/register',
+  newAcquisition: () => '/register/acquisitions/new',
+  newDisposition: () => '/register/dispositions/new',
+  transaction: (number: string) => `/register/transactions/${part(number)}`,
+  history: (accession: string) => `/register/histories/${part(accession)}`,
+  parties: () => '/register/parties',
   permits: () => '/register/permits',
+  newPermit: () => '/register/permits/new',
+  permit: (number: string) => `/register/permits/${part(number)}`,
   exports: () => '/register/exports',
   imports: () => '/register/imports',
 
@@ -47,6 +54,7 @@ export const paths = {
   samples: () => '/samples',
   tracing: () => '/tracing',
   reports: () => '/reports',
+  checks: () => '/check',
   check: (fingerprint: string) => `/check/${part(fingerprint)}`,
   tankLabel: (code: string) => `/e/${part(code)}`,
 

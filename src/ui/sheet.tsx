@@ -3,7 +3,7 @@ import type { ComponentProps, ReactNode } from 'react'
 import { classNames } from './class-names.ts'
 
 export type SheetRecipe =
-  'plain' | 'list-log' | 'list' | 'board' | 'case' | 'order' | 'record' | 'enclosure' | 'register'
+  'plain' | 'list-log' | 'list' | 'board' | 'case' | 'order' | 'record' | 'enclosure' | 'register' | 'history'
 
 /** Whether an hour ruler stands above the sheet and is its upper edge. The frame says so. */
 export const HoursAboveContext = createContext(false)

@@ -29,6 +29,7 @@ export function WrongSummary({
           {fields.map((field) => (
             <li key={field.id}>
               <a
+                className="inline-block min-h-6 py-0.5"
                 href={`#${field.id}`}
                 onClick={(event) => {
                   event.preventDefault()

@@ -190,6 +190,7 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
                   : null,
                 count: line.count,
                 ...(line.estimate ? { estimate: line.estimate } : {}),
+                ...(line.identifiers ? { identifiers: line.identifiers } : {}),
                 kind: given.kind,
                 enclosureId: line.enclosureId,
                 happenedAt: placed.at,

@@ -1,5 +1,7 @@
-import type { BodyOf } from '../../../shared/contracts/contract.ts'
-import type { recordAcquisition, recordDisposition } from '../../../shared/contracts/acquisitions.contract.ts'
+import type {
+  NewAcquisition as AcquisitionGiven,
+  NewDisposition as DispositionGiven,
+} from '../../../shared/contracts/acquisition-bodies.ts'
 import type { FieldProblem } from '../../../shared/contracts/problems.ts'
 import { readPartialDate } from '../../../shared/domain/register/partial-date.ts'
 import { hasPassed, placeInTime } from '../../../shared/domain/register/place-in-time.ts'
@@ -8,8 +10,7 @@ import { transactionKinds } from '../../../shared/domain/register/transaction-ki
 import { registerSentences as says } from '../../../shared/messages/register-sentences.ts'
 import { Problem } from '../../platform/http/problem.ts'
 
-export type AcquisitionGiven = BodyOf<typeof recordAcquisition>
-export type DispositionGiven = BodyOf<typeof recordDisposition>
+export type { AcquisitionGiven, DispositionGiven }
 export type Given = AcquisitionGiven | DispositionGiven
 
 type Line = Given['lines'][number]

@@ -1,3 +1,4 @@
+export { EnclosureChooser, everyEnclosure } from './choose-enclosure.tsx'
 export { EnclosureForm } from './enclosure-form.tsx'
 export { descriptionOf, emptyFields, fieldsOf } from './enclosure-form-model.ts'
 export type { EnclosureFields } from './enclosure-form-model.ts'

@@ -1,0 +1,10 @@
+import { defineMessages } from './define-messages.ts'
+
+/** What a form says of a field before it asks the server. */
+export const formWords = defineMessages({
+  needed: 'Fill this in.',
+  wholeNumber: 'Type a whole number.',
+  number: 'Type a number, for example 44.62.',
+  tooLong: (p: { most: number }) => `Use at most ${String(p.most)} characters.`,
+  sending: 'Sending',
+})

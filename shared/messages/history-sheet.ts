@@ -1,0 +1,46 @@
+import { counted, defineMessages } from './define-messages.ts'
+
+/** Words of the history on the screen, and of its export. */
+export const historySheetWords = defineMessages({
+  path: 'Register',
+  source: (p: { form: string }) => p.form,
+  group: 'a group',
+  loading: 'the history',
+  ports: 'Acquisition history',
+  ledger: 'Count ledger',
+  identifiers: 'Identifiers',
+  export: 'Export',
+  format: 'Format',
+  forSpreadsheets: 'Guard cells that a spreadsheet would run as formulas',
+  forSpreadsheetsHint: 'Puts an apostrophe before them. Without it the file is literal.',
+  reason: 'What it is for',
+  reasonHint: 'Kept with the export, for example “yearly loan report”.',
+  what: 'What you will get',
+  whatPdf: (p: { entries: number }) =>
+    `Pages with ${counted(p.entries, 'entry', 'entries')}, the ledger with its sum, identifiers, permits and papers. Each page carries the time, your name and a record check.`,
+  whatCsv: (p: { entries: number }) =>
+    `One file with ${counted(p.entries, 'row', 'rows')}, one event a row. What was struck out is marked.`,
+  whatJson: 'Everything on this sheet as data, with balances and sums by kind.',
+  whatDarwin: (p: { entries: number }) =>
+    `One file with at most ${counted(p.entries, 'row', 'rows')} in the terms of Darwin Core. What was struck out is left out.`,
+  act: 'Export',
+  acting: 'Exporting',
+  made: (p: { name: string }) => `${p.name} is made and kept.`,
+  recorded: 'The export is written in the record.',
+  earlier: 'Earlier exports',
+  noneEarlier: 'Nothing was exported before.',
+  earlierLine: (p: { at: string; by: string }) => `${p.at}, ${p.by}`,
+  mayNot: 'Histories are exported by a registrar or a veterinarian.',
+  exportsTitle: 'Exports',
+  exportsSource: 'Every file that left the register, with the hash of its bytes.',
+  search: 'Find by number, person, purpose or file',
+  empty: 'Nothing was exported yet',
+  emptyBody: 'Open an animal’s history to export it.',
+  file: 'File',
+  animal: 'Animal or group',
+  purpose: 'For',
+  by: 'Exported by',
+  at: 'Exported',
+  size: 'Size',
+  hash: 'SHA-256, first 16 digits',
+})

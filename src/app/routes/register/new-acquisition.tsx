@@ -1,0 +1,6 @@
+import { NewTransaction } from './new-transaction.tsx'
+
+/** Animals come. */
+export function Component() {
+  return <NewTransaction way="in" />
+}

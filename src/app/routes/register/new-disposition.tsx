@@ -1,0 +1,6 @@
+import { NewTransaction } from './new-transaction.tsx'
+
+/** Animals leave. */
+export function Component() {
+  return <NewTransaction way="out" />
+}

@@ -1,0 +1,6 @@
+export { TransactionsList } from './transactions-list.tsx'
+export { TransactionFacts, TransactionView } from './transaction-view.tsx'
+export { TransactionForm } from './transaction-form.tsx'
+export { PapersLeft } from './papers-left.tsx'
+export { transactionQuery, transactionsAsked, transactionsCsvAddress } from './queries.ts'
+export type { Recorded } from './mutations.ts'

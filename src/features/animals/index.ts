@@ -1,0 +1,3 @@
+export { TaxonChooser, everyTaxon } from './choose-taxon.tsx'
+export { AnimalChooser } from './choose-animal.tsx'
+export type { ChooserProps } from './choose-taxon.tsx'

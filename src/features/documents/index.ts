@@ -1,0 +1,7 @@
+export { Papers } from './papers.tsx'
+export { blankPaper } from './attach-dialog.tsx'
+export { paperFaults, PaperFields } from './paper-fields.tsx'
+export { sendPaper } from './mutations.ts'
+export { paperAddress, checkQuery } from './queries.ts'
+export { CheckView } from './check-view.tsx'
+export type { PaperGiven } from './mutations.ts'

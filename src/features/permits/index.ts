@@ -1,0 +1,5 @@
+export { PermitsList, permitsAsked } from './permits-list.tsx'
+export { PermitForm } from './permit-form.tsx'
+export { PermitFacts, PermitView } from './permit-view.tsx'
+export { PermitChooser } from './choose-permit.tsx'
+export { permitQuery, permitsCsvAddress, permitsKey } from './queries.ts'

@@ -1,0 +1,43 @@
+import { get, set } from 'react-hook-form'
+import type { FieldErrors, FieldValues, Resolver } from 'react-hook-form'
+import type { z } from 'zod'
+import { formWords } from '../../shared/messages/form.ts'
+
+type Issue = z.core.$ZodIssue
+
+/** What is wrong with one field, in words for a person: an absent value is asked for, a number is asked for as one. */
+function says(issue: Issue, value: unknown): string {
+  if (value === undefined || value === null) return formWords.needed
+  if (typeof value === 'number' && Number.isNaN(value)) return formWords.number
+  if (typeof value === 'number' && !Number.isInteger(value) && issue.code === 'invalid_type')
+    return formWords.wholeNumber
+  if (issue.code === 'too_big' && typeof value === 'string')
+    return formWords.tooLong({ most: Number(issue.maximum) })
+  return issue.message
+}
+
+/**
+ * Checks a form by the schema of the body that it will send, so that the form and the server ask for the same. Names in
+ * the form are those of the body, so that a fault found by either stands at the same field.
+ *
+ * @param needed names of fields that the form itself asks for, though the schema would let them pass
+ */
+export function bodyResolver<V extends FieldValues>(
+  schema: z.ZodType,
+  toBody: (values: V) => unknown,
+  needed: (values: V) => readonly string[] = () => [],
+): Resolver<V> {
+  return (values) => {
+    const body = toBody(values)
+    const parsed = schema.safeParse(body)
+    const errors: FieldErrors<V> = {}
+    for (const name of needed(values)) set(errors, name, { type: 'needed', message: formWords.needed })
+    if (parsed.success && Object.keys(errors).length === 0) return { values, errors: {} }
+    for (const issue of parsed.error?.issues ?? []) {
+      const name = issue.path.map(String).join('.')
+      if (get(errors, name)) continue
+      set(errors, name, { type: 'body', message: says(issue, get(body, name)) })
+    }
+    return { values: {}, errors }
+  }
+}
