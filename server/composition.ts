@@ -22,6 +22,7 @@ import { createTransactions } from './platform/database/transactions.ts'
 import { createFileStore } from './platform/files/file-store.ts'
 import { createIds } from './platform/ids.ts'
 import type { Log } from './platform/log.ts'
+import { createMail } from './platform/mail/mail.ts'
 import { createPdfPool } from './platform/pdf/pdf-pool.ts'
 import { createSigner } from './platform/signatures/signer.ts'
 import { createLockout } from './platform/sign-in/lockout.ts'
@@ -34,6 +35,10 @@ export interface Outside {
   demo: boolean
   /** Folder of keys and attachments; belongs into the backup. */
   dataFolder: string
+  /** Mail server; without one letters lie in the data folder where the demo is shown, and cannot be sent elsewhere. */
+  smtpUrl?: string | null
+  /** Where people reach the application, for letters. */
+  publicUrl?: string
 }
 
 /** The one place where features are made, in an order in which each asks only those made before it. */
@@ -45,6 +50,11 @@ export function compose(outside: Outside) {
     transactions: createTransactions({ dataSource, clock }),
     files: createFileStore(path.join(outside.dataFolder, 'files')),
     pdf: createPdfPool(),
+    mail: createMail({
+      smtpUrl: outside.smtpUrl ?? null,
+      folder: outside.demo ? path.join(outside.dataFolder, 'mailbox') : null,
+      clock,
+    }),
   }
   const facility = createFacility(parts)
   const people = createPeople({ ...parts, facility: facility.service })
@@ -59,6 +69,17 @@ export function compose(outside: Outside) {
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
   const animals = createAnimals({ ...parts, facility: facility.service })
   const documents = createDocuments(parts)
+  const quarantine = createQuarantine({
+    ...parts,
+    facility: facility.service,
+    people,
+    signing: signing.service,
+    animals,
+    water,
+    enclosures,
+    mail: parts.mail,
+    publicUrl: outside.publicUrl ?? '',
+  })
   const counterparties = createCounterparties(parts)
   const register = {
     ...parts,
@@ -80,14 +101,6 @@ export function compose(outside: Outside) {
     documents,
   })
   const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
-  const quarantine = createQuarantine({
-    ...parts,
-    facility: facility.service,
-    people,
-    signing: signing.service,
-    animals,
-    water,
-  })
   return {
     parts,
     authenticator,
@@ -125,8 +138,13 @@ export function compose(outside: Outside) {
       ...administrations.routes,
       ...quarantine.routes,
     ],
+    /** Handlers of background work, by name. */
+    jobs: { ...quarantine.jobs },
     /** Ends what runs beside the requests. */
-    close: () => parts.pdf.close(),
+    close: async () => {
+      parts.mail.close()
+      await parts.pdf.close()
+    },
   }
 }
 

@@ -9,8 +9,9 @@ import { builtPages, developmentPages } from './pages.ts'
 import type { Pages } from './pages.ts'
 import { seedDemo } from './demo/seed-demo.ts'
 import type { Clock } from './platform/clock.ts'
-import { connectRuntime } from './platform/database/data-source.ts'
+import { connectRuntime, poolOf } from './platform/database/data-source.ts'
 import { prepareDatabase, runtimeUrlOf } from './platform/database/prepare-database.ts'
+import { startJobs } from './platform/jobs/jobs.ts'
 import { createLog } from './platform/log.ts'
 
 export interface RunningServer {
@@ -29,7 +30,16 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
     entities,
   )
   if (config.demo) await seedDemo({ dataSource, clock, log, dataFolder: config.dataFolder })
-  const composition = compose({ dataSource, clock, log, demo: config.demo, dataFolder: config.dataFolder })
+  const { demo, dataFolder, smtpUrl } = config
+  const composition = compose({
+    dataSource,
+    clock,
+    log,
+    demo,
+    dataFolder,
+    smtpUrl,
+    publicUrl: config.publicUrl ?? `http://${config.host}:${String(config.port)}`,
+  })
 
   await composition.formulary.service.loadDefaults()
 
@@ -40,6 +50,7 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
       : builtPages(path.join(root, 'dist', 'client'))
   const { app, close } = createApp({ config, composition, pages: pages.handler })
   server.on('request', app)
+  const jobs = await startJobs(poolOf(dataSource), composition.jobs, log)
   await new Promise<void>((resolve, reject) => {
     server.once('error', reject)
     server.listen(config.port, config.host, resolve)
@@ -57,6 +68,7 @@ export async function startServer(config: Config, clock: Clock): Promise<Running
       await ended
       clearTimeout(hurry)
       close()
+      await jobs.stop()
       await composition.close()
       await dataSource.destroy()
     },

@@ -12,6 +12,8 @@ import * as facility from './facility.contract.ts'
 import * as formulary from './formulary.contract.ts'
 import * as doses from './doses.contract.ts'
 import * as orders from './orders.contract.ts'
+import * as notices from './notices.contract.ts'
+import * as observations from './observations.contract.ts'
 import * as people from './people.contract.ts'
 import * as permits from './permits.contract.ts'
 import * as protocols from './protocols.contract.ts'
@@ -50,6 +52,8 @@ const modules = [
   protocols,
   quarantine,
   caseEvents,
+  observations,
+  notices,
 ]
 
 const isContract = (value: unknown): value is Contract =>

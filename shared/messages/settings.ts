@@ -9,6 +9,7 @@ export const settingNames = defineMessages({
   'facility.paper': 'Paper',
   'facility.gallon': 'What “gal” means when no kind is stated',
   'numbers.accession': 'Form of accession numbers',
+  'notices.on-call': 'Whom to call when something is urgent',
 } satisfies Record<SettingKey, string>)
 
 export const settingHints = defineMessages({
@@ -19,6 +20,8 @@ export const settingHints = defineMessages({
   'facility.paper': 'A4 or Letter, for every printed document.',
   'facility.gallon': 'Refused asks each time which gallon is meant.',
   'numbers.accession': 'Zeros in braces are the running number, for example HP-{0000}.',
+  'notices.on-call':
+    'Name, telephone and e-mail, with bars between them and a comma after each: Dr A. Name | 555 0100 | name@example.org. In the order in which to call.',
 } satisfies Record<SettingKey, string>)
 
 export const settingRefusals = defineMessages({

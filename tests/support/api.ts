@@ -9,8 +9,9 @@ import { compose } from '../../server/composition.ts'
 import type { Composition } from '../../server/composition.ts'
 import { entities } from '../../server/entities.ts'
 import { settableClock } from '../../server/platform/clock.ts'
-import { connectRuntime } from '../../server/platform/database/data-source.ts'
+import { connectRuntime, poolOf } from '../../server/platform/database/data-source.ts'
 import { installation } from '../../server/platform/http/request-context.ts'
+import { startJobs } from '../../server/platform/jobs/jobs.ts'
 import { createLog } from '../../server/platform/log.ts'
 import type { Role } from '../../shared/domain/permissions/roles.ts'
 import type { SettingKey } from '../../shared/domain/settings/settings.ts'
@@ -47,12 +48,21 @@ export const newKey = () => randomUUID()
 const background = { actor: installation, requestId: 'test' }
 
 /** The whole server on a database of its own, as the runtime role, on a fixed day, with one person a role. */
-export async function startApi(): Promise<TestApi> {
+export async function startApi(given: { smtpUrl?: string; jobs?: boolean } = {}): Promise<TestApi> {
   const database = await cloneDatabase()
   const dataSource = await connectRuntime(database.runtimeUrl, entities, 6)
   const clock = settableClock(testDay)
   const dataFolder = await mkdtemp(path.join(tmpdir(), 'pratique-test-'))
-  const composition = compose({ dataSource, clock, log: createLog('silent'), demo: false, dataFolder })
+  const composition = compose({
+    dataSource,
+    clock,
+    log: createLog('silent'),
+    demo: false,
+    dataFolder,
+    smtpUrl: given.smtpUrl ?? null,
+    publicUrl: 'https://pratique.example',
+  })
+  const jobs = given.jobs ? await startJobs(poolOf(dataSource), composition.jobs, createLog('silent')) : null
   const { app, close } = createApp({
     config: { sessionSecret: 'x'.repeat(40), publicUrl: null, mode: 'test' },
     composition,
@@ -113,6 +123,7 @@ export async function startApi(): Promise<TestApi> {
     nextId,
     async stop() {
       close()
+      await jobs?.stop()
       await composition.close()
       await dataSource.destroy()
       await rm(dataFolder, { recursive: true, force: true })

@@ -57,66 +57,90 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
     })
   }
 
+  async function postDeaths(tx: Tx, accession: string, given: DeathsRequest): Promise<void> {
+    const animal = await moves.lockByAccession(tx, accession)
+    const times = await facility.timesOf(tx, given.happenedAt)
+    const content = {
+      id: given.id,
+      animalId: animal.id,
+      kind: given.kind,
+      seenCount: given.count,
+      carcassState: given.carcassState ?? null,
+      carcassPlace: given.carcassPlace ?? null,
+      note: given.note ?? null,
+      happenedAt: times.happenedAt,
+    }
+    if (await isRepeated(tx, DeathRow, content)) return
+    if (given.enclosureId !== undefined)
+      await moves.findTarget(tx, given.enclosureId, new Date(0), '/enclosureId')
+    const enclosureId = given.enclosureId ?? (await ledgers.placeAt(tx, animal.id, times.happenedAt))
+    const kind = given.kind === 'euthanised' ? 'euthanasia' : 'death'
+    const posted = await ledgers.post(
+      tx,
+      animal,
+      { id: parts.ids.next(), kind, delta: -given.count, reason: null },
+      times,
+    )
+    await repository.insertDeath(tx, {
+      ...content,
+      ...times,
+      enclosureId,
+      postedCount: posted.postedCount,
+      countEntryId: posted.entryId,
+    })
+    tx.audit({
+      action: 'animal.record-deaths',
+      subject: subjectOf(animal),
+      after: {
+        kind: given.kind,
+        seen: given.count,
+        posted: posted.postedCount,
+        happenedAt: times.happenedAt.toISOString(),
+      },
+    })
+    const source = { kind: 'death', id: given.id }
+    if (posted.excessCount > 0)
+      await ledgers.openDiscrepancy(tx, animal, {
+        kind: 'more-than-counted',
+        source,
+        facts: {
+          seen: given.count,
+          posted: posted.postedCount,
+          excess: posted.excessCount,
+          cause: kind,
+        },
+        times,
+      })
+    await ledgers.settlePlace(tx, animal, source)
+  }
+
+  async function postCount(tx: Tx, accession: string, given: CountRequest): Promise<void> {
+    if (given.high < given.low || (given.basis === 'counted' && given.high !== given.low))
+      throw refuseField('bad-input', '/high', animalRefusals.countRange)
+    const animal = await moves.lockByAccession(tx, accession)
+    const times = await facility.timesOf(tx, given.happenedAt)
+    const { id, basis, low, high } = given
+    const content = { id, animalId: animal.id, basis, low, high, happenedAt: times.happenedAt }
+    if (await isRepeated(tx, CountStatementRow, content)) return
+    needGroup(animal)
+    await repository.insertStatement(tx, { ...content, note: given.note ?? null, ...times })
+    tx.audit({
+      action: 'animal.state-count',
+      subject: subjectOf(animal),
+      after: { basis, low, high, happenedAt: times.happenedAt.toISOString() },
+    })
+    await compareStatement(tx, animal, given, times)
+    await ledgers.settlePlace(tx, animal, { kind: 'count-statement', id })
+  }
+
   return {
     /** Deaths as they were seen, for an individual or in a group; what the ledger cannot give opens a discrepancy. */
     async recordDeaths(context: RequestContext, accession: string, given: DeathsRequest): Promise<void> {
-      await parts.transactions.inTransaction(context, async (tx) => {
-        const animal = await moves.lockByAccession(tx, accession)
-        const times = await facility.timesOf(tx, given.happenedAt)
-        const content = {
-          id: given.id,
-          animalId: animal.id,
-          kind: given.kind,
-          seenCount: given.count,
-          carcassState: given.carcassState ?? null,
-          carcassPlace: given.carcassPlace ?? null,
-          note: given.note ?? null,
-          happenedAt: times.happenedAt,
-        }
-        if (await isRepeated(tx, DeathRow, content)) return
-        if (given.enclosureId !== undefined)
-          await moves.findTarget(tx, given.enclosureId, new Date(0), '/enclosureId')
-        const enclosureId = given.enclosureId ?? (await ledgers.placeAt(tx, animal.id, times.happenedAt))
-        const kind = given.kind === 'euthanised' ? 'euthanasia' : 'death'
-        const posted = await ledgers.post(
-          tx,
-          animal,
-          { id: parts.ids.next(), kind, delta: -given.count, reason: null },
-          times,
-        )
-        await repository.insertDeath(tx, {
-          ...content,
-          ...times,
-          enclosureId,
-          postedCount: posted.postedCount,
-          countEntryId: posted.entryId,
-        })
-        tx.audit({
-          action: 'animal.record-deaths',
-          subject: subjectOf(animal),
-          after: {
-            kind: given.kind,
-            seen: given.count,
-            posted: posted.postedCount,
-            happenedAt: times.happenedAt.toISOString(),
-          },
-        })
-        const source = { kind: 'death', id: given.id }
-        if (posted.excessCount > 0)
-          await ledgers.openDiscrepancy(tx, animal, {
-            kind: 'more-than-counted',
-            source,
-            facts: {
-              seen: given.count,
-              posted: posted.postedCount,
-              excess: posted.excessCount,
-              cause: kind,
-            },
-            times,
-          })
-        await ledgers.settlePlace(tx, animal, source)
-      })
+      await parts.transactions.inTransaction(context, (tx) => postDeaths(tx, accession, given))
     },
+
+    /** The same in the transaction of an observation that found them. */
+    postDeaths,
 
     /** Strikes out a death that was recorded by mistake, with its ledger line; its discrepancy is explained by that. */
     async strikeDeath(context: RequestContext, accession: string, id: string, reason: string): Promise<void> {
@@ -195,25 +219,11 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
 
     /** What was counted or estimated; the ledger stays as it is. */
     async stateCount(context: RequestContext, accession: string, given: CountRequest): Promise<void> {
-      if (given.high < given.low || (given.basis === 'counted' && given.high !== given.low))
-        throw refuseField('bad-input', '/high', animalRefusals.countRange)
-      await parts.transactions.inTransaction(context, async (tx) => {
-        const animal = await moves.lockByAccession(tx, accession)
-        const times = await facility.timesOf(tx, given.happenedAt)
-        const { id, basis, low, high } = given
-        const content = { id, animalId: animal.id, basis, low, high, happenedAt: times.happenedAt }
-        if (await isRepeated(tx, CountStatementRow, content)) return
-        needGroup(animal)
-        await repository.insertStatement(tx, { ...content, note: given.note ?? null, ...times })
-        tx.audit({
-          action: 'animal.state-count',
-          subject: subjectOf(animal),
-          after: { basis, low, high, happenedAt: times.happenedAt.toISOString() },
-        })
-        await compareStatement(tx, animal, given, times)
-        await ledgers.settlePlace(tx, animal, { kind: 'count-statement', id })
-      })
+      await parts.transactions.inTransaction(context, (tx) => postCount(tx, accession, given))
     },
+
+    /** The same in the transaction of an observation that counted them. */
+    postCount,
 
     /** A signed correction of the ledger, with its reason. */
     async adjustCount(

@@ -33,22 +33,28 @@ export async function lockCases(tx: Tx, ids: readonly string[]): Promise<void> {
   )
 }
 
-/** The running case that an animal belongs to, by a joining of its own or of the group it came from; or null. */
-export async function findRunningCaseOf(
+/**
+ * The case that an animal belonged to at an instant, by a joining of its own or of the group it came from; null when
+ * there was none, or it had ended.
+ */
+export async function findCaseOf(
   tx: Tx,
   animalId: string,
+  at: Date,
 ): Promise<{ id: string; number: string } | null> {
   const [row]: { id: string; number: string }[] = await tx.manager.query(
     `WITH RECURSIVE line AS (
        SELECT a.id, a.split_from_id FROM animals a WHERE a.id = $1
        UNION SELECT a.id, a.split_from_id FROM animals a JOIN line l ON a.id = l.split_from_id)
      SELECT c.id, c.number FROM case_members m JOIN quarantine_cases c ON c.id = m.case_id
-      WHERE m.animal_id IN (SELECT l.id FROM line l)
+      WHERE m.animal_id IN (SELECT l.id FROM line l) AND m.happened_at <= $2
         AND NOT EXISTS (SELECT 1 FROM case_events v
                          WHERE v.kind = 'voided' AND v.facts ->> 'voidsEventId' = m.id::text)
         AND NOT EXISTS (SELECT 1 FROM live_case_events e
-                         WHERE e.case_id = c.id AND e.kind IN ('cleared', 'transferred-out'))`,
-    [animalId],
+                         WHERE e.case_id = c.id AND e.kind IN ('cleared', 'transferred-out')
+                           AND e.happened_at <= $2)
+      ORDER BY m.happened_at DESC LIMIT 1`,
+    [animalId, at],
   )
   return row ?? null
 }

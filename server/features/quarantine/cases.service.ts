@@ -68,7 +68,7 @@ export function createCasesService(
     pointer: string,
   ): Promise<void> {
     const { animal, accession } = one
-    const running = await repository.findRunningCaseOf(tx, animal.animalId)
+    const running = await repository.findCaseOf(tx, animal.animalId, tx.at)
     if (running && running.id !== caseId)
       throw field(
         'already-in-a-case',

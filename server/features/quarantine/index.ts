@@ -1,5 +1,7 @@
 import type { Parts } from '../../platform/parts.ts'
 import type { Animals } from '../animals/index.ts'
+import type { Mail } from '../../platform/mail/mail.ts'
+import type { Enclosures } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { People } from '../people/index.ts'
 import type { SigningService } from '../signing/index.ts'
@@ -17,6 +19,10 @@ import {
   ObservationVoidRow,
 } from './observation.entity.ts'
 import { ProtocolConfirmationRow, ProtocolRow, ProtocolVersionRow } from './protocol.entity.ts'
+import { createNoticesService } from './notices.service.ts'
+import { createObservationQueries } from './observations.queries.ts'
+import { observationRoutes } from './observations.routes.ts'
+import { createObservationsService } from './observations.service.ts'
 import { createProtocolsService } from './protocols.service.ts'
 import { createQuarantineQueries } from './quarantine.queries.ts'
 import { quarantineRoutes } from './quarantine.routes.ts'
@@ -48,6 +54,9 @@ export function createQuarantine(
     signing: SigningService
     animals: Animals
     water: Water
+    enclosures: Enclosures
+    mail: Mail
+    publicUrl: string
   },
 ) {
   const parts = { ...given, people: given.people.questions, water: given.water.questions }
@@ -55,11 +64,19 @@ export function createQuarantine(
   const cases = createCasesService({ ...parts, writer })
   const events = createCaseEventsService({ ...parts, writer })
   const protocols = createProtocolsService(parts)
+  const notices = createNoticesService(parts)
+  const observations = createObservationsService({ ...parts, writer, notices })
   const queries = createQuarantineQueries(parts)
+  const observationQueries = createObservationQueries(parts)
   return {
-    services: { cases, events, protocols },
+    services: { cases, events, protocols, observations, notices },
     queries,
-    routes: quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
+    routes: [
+      ...quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
+      ...observationRoutes({ observations, notices, queries: observationQueries }),
+    ],
+    /** Work that runs beside the requests. */
+    jobs: { 'send-notice': (payload: { id: string }) => notices.send(payload) },
   }
 }
 

@@ -51,6 +51,7 @@ export const settings = {
     confirm: 'facility.manage',
     source: 'project-default',
   },
+  'notices.on-call': { default: '', kind: 'list', confirm: 'facility.manage', source: 'project-default' },
 } as const satisfies Record<string, SettingDefinition>
 
 export type SettingKey = keyof typeof settings
