@@ -78,7 +78,7 @@ export const identifierKindNames = defineMessages({
 
 export const deathKindNames = defineMessages({
   'found-dead': 'found dead',
-  'died-seen': 'died while watched',
+  'died-seen': 'seen to die',
   euthanised: 'euthanised',
 } satisfies Record<DeathKind, string>)
 

@@ -7,4 +7,5 @@ export const clientWords = defineMessages({
   tooSlow: 'The server did not answer in time',
   notUnderstood: 'The answer could not be read',
   notUnderstoodDetail: 'A new version may have been put in place. Load the page again.',
+  typeTime: 'Give the date and the time.',
 })

@@ -23,8 +23,11 @@ export function animalRoutes(queries: AnimalQueries, clock: Clock): Route[] {
       queries.animal(params.accession, context.actor.roles),
     ),
     route(contracts.listInhabitants, async ({ params, query }) => {
-      const at = query.at === undefined ? clock.now() : new Date(query.at)
-      return { at: at.toISOString(), rows: await queries.inhabitants(params.code, at) }
+      const at = query.at === undefined ? undefined : new Date(query.at)
+      return {
+        at: (at ?? clock.now()).toISOString(),
+        rows: await queries.inhabitants(params.code, at),
+      }
     }),
     route(contracts.listWeights, async ({ params }) => ({ rows: await queries.weights(params.accession) })),
     route(contracts.listMoves, async ({ params }) => ({ rows: await queries.moves(params.accession) })),

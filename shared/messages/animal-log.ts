@@ -1,0 +1,76 @@
+import type { DiscrepancyKind, DiscrepancyOutcome } from '../domain/animals/discrepancy.ts'
+import { counted, defineMessages } from './define-messages.ts'
+
+const animals = (count: number) => counted(count, 'animal', 'animals')
+const because = (reason: string) => (reason ? `: ${reason}` : '')
+
+/** Sentences of the log of one animal. Every parameter is in words already; `''` stands for what nobody said. */
+export const animalLogWords = defineMessages({
+  weighed: (p: { weight: string; basis: string; method: string; kept: string }) =>
+    `Weight ${p.weight}, ${p.basis}${p.method ? `, ${p.method}` : ''}.${p.kept ? ` Kept because ${p.kept}.` : ''}`,
+  weighedTogether: (p: { weight: string; count: number; basis: string }) =>
+    `${animals(p.count)} weighed together, ${p.weight}, ${p.basis}.`,
+  arrived: (p: { to: string; reason: string }) => `Came into ${p.to}${because(p.reason)}.`,
+  moved: (p: { from: string; to: string; reason: string }) =>
+    `Moved from ${p.from} to ${p.to}${because(p.reason)}.`,
+  left: (p: { from: string; reason: string }) => `Left ${p.from}${because(p.reason)}.`,
+  transferred: (p: { from: string; to: string; words: string }) =>
+    `Documented transfer from ${p.from} to ${p.to}: ${p.words}.`,
+  movedAgainst: (p: { from: string; to: string; reason: string }) =>
+    `Moved from ${p.from} to ${p.to} against the rule${because(p.reason)}.`,
+  died: (p: { how: string; state: string; note: string }) =>
+    `${p.how}${p.state ? `, ${p.state}` : ''}${because(p.note)}.`,
+  diedMore: (p: { seen: number; posted: number; how: string }) =>
+    `${String(p.seen)} ${p.how}; the ledger had ${String(p.posted)}.`,
+  counted: (p: { change: string; delta: string; reason: string }) =>
+    `${p.change}, ${p.delta}${because(p.reason)}.`,
+  countedWith: (p: { change: string; delta: string; other: string }) =>
+    `${p.change}, ${p.delta}, ${p.other}.`,
+  statedCount: (p: { count: number }) => `Counted: ${animals(p.count)}.`,
+  statedEstimate: (p: { low: number; high: number }) => `Estimated: ${String(p.low)} to ${animals(p.high)}.`,
+  described: (p: { taxon: string; name: string; sex: string; stage: string; reason: string }) =>
+    `Described as ${p.taxon}${p.name ? `, ${p.name}` : ''}, ${p.sex}, ${p.stage}${because(p.reason)}.`,
+  marked: (p: { mark: string; value: string; place: string }) =>
+    `Mark recorded: ${p.mark} ${p.value}${p.place ? `, ${p.place}` : ''}.`,
+  markEnded: (p: { mark: string; value: string; reason: string }) =>
+    `${p.mark} ${p.value} no longer there: ${p.reason}.`,
+  quarantined: (p: { source: string; reason: string }) => `In quarantine, ${p.source}: ${p.reason}.`,
+  heldStill: (p: { source: string; reason: string }) => `Held, no movement, ${p.source}: ${p.reason}.`,
+  freed: (p: { source: string; reason: string }) => `Free to move again, ${p.source}: ${p.reason}.`,
+  opened: (p: { what: string; role: string }) => `To be explained by a ${p.role}: ${p.what}`,
+  resolved: (p: { outcome: string; reason: string }) => `Explained, ${p.outcome}: ${p.reason}.`,
+  struck: (p: { reason: string }) => `Struck out: ${p.reason}`,
+  today: 'Today',
+})
+
+/** What does not fit, in short. */
+export const discrepancyNames = defineMessages({
+  'more-than-counted': 'more than the ledger had.',
+  'moved-under-lock': 'moved while it was held.',
+  'crossed-boundary': 'moved over its quarantine boundary.',
+  'place-contradicted': 'gone at a time at which later moves have it elsewhere.',
+  'identifier-twice': 'one mark read on two animals.',
+  'count-differs': 'a count that differs from the ledger.',
+} satisfies Record<DiscrepancyKind, string>)
+
+export const outcomeNames = defineMessages({
+  'count-corrected': 'the ledger corrected',
+  'seen-wrongly': 'recorded by mistake',
+  explained: 'as the reason says',
+} satisfies Record<DiscrepancyOutcome, string>)
+
+/** The whole story of a discrepancy, for whoever explains it. */
+export const discrepancySentences = defineMessages({
+  'more-than-counted': (p) => `${p.said('seen')} were seen, ${p.said('posted')} were in the ledger.`,
+  'moved-under-lock': (p) =>
+    `Moved from ${p.said('from')} to ${p.said('to')} while it was held: ${p.said('reason')}`,
+  'crossed-boundary': (p) =>
+    `Moved from ${p.said('from')} to ${p.said('to')}, over its quarantine boundary: ${p.said('reason')}`,
+  'place-contradicted': () =>
+    'The last of it left at a time at which later moves still have it in an enclosure.',
+  'identifier-twice': (p) => `${p.said('value')} was also read on ${p.said('other')}: ${p.said('reason')}`,
+  'count-differs': (p) =>
+    p.said('low') === p.said('high')
+      ? `${p.said('low')} were counted, ${p.said('ledger')} are in the ledger.`
+      : `${p.said('low')} to ${p.said('high')} were estimated, ${p.said('ledger')} are in the ledger.`,
+} satisfies Record<DiscrepancyKind, (p: { said: (key: string) => string }) => string>)

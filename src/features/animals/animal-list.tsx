@@ -1,0 +1,263 @@
+import { useState } from 'react'
+import type { ReactNode } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import { Link } from 'react-router-dom'
+import { Download } from 'lucide-react'
+import { animalSorts, listAnimalsCsv } from '../../../shared/contracts/animals.contract.ts'
+import type { AnimalRow } from '../../../shared/contracts/animals.contract.ts'
+import { animalForms as forms } from '../../../shared/domain/animals/description.ts'
+import { taxonGroupNames as groups } from '../../../shared/domain/taxa/taxon-group.ts'
+import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
+import { taxonGroupNames } from '../../../shared/messages/animals.ts'
+import { addressOf } from '../../lib/api-client.ts'
+import { useFacilityNow } from '../../lib/facility-time.ts'
+import { useListState } from '../../lib/list-state.ts'
+import { useMe } from '../../lib/me.ts'
+import { paths } from '../../lib/paths.ts'
+import { isProblem } from '../../lib/problem-error.ts'
+import { Button } from '../../ui/button.tsx'
+import { Cartouche } from '../../ui/cartouche.tsx'
+import { DataTable } from '../../ui/data-table.tsx'
+import type { TableColumn } from '../../ui/data-table-columns.ts'
+import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { Quantity } from '../../ui/quantity.tsx'
+import { SelectField } from '../../ui/select-field.tsx'
+import { Area, Sheet } from '../../ui/sheet.tsx'
+import { TextField } from '../../ui/text-field.tsx'
+import { countText } from './animal-name.ts'
+import { sayDayOrTime } from './say-day-or-time.ts'
+import { animalListQuery } from './queries.ts'
+import type { AnimalListQuery } from './queries.ts'
+import { Standing } from './standing.tsx'
+import { weightOfOne } from './weight-text.ts'
+
+const states = ['here', 'gone', 'all'] as const
+
+function columnsOf(p: { zone: string; now: string; massUnit: string | undefined }): TableColumn<AnimalRow>[] {
+  return [
+    {
+      id: 'accession',
+      heading: words.accession,
+      sort: true,
+      cell: (row) => (
+        <Link to={paths.animal(row.accession)} className="t-strong num">
+          {row.accession}
+        </Link>
+      ),
+    },
+    {
+      id: 'name',
+      heading: words.animal,
+      sort: true,
+      cell: (row) => (
+        <>
+          <b className="t-strong">{row.taxon.commonName}</b>
+          {row.name ? `, ${row.name}` : ''}
+          <span className="sci block max-[600px]:hidden">{row.taxon.scientificName}</span>
+        </>
+      ),
+    },
+    {
+      id: 'count',
+      heading: words.count,
+      sort: true,
+      number: true,
+      cell: (row) => (row.form === 'individual' ? '' : countText(row.count)),
+    },
+    {
+      id: 'place',
+      heading: words.place,
+      sort: true,
+      className: 'pl-5',
+      cell: (row) =>
+        row.place ? (
+          <>
+            <Link to={paths.enclosure(row.place.code)} className="num">
+              {row.place.code}
+            </Link>
+            <span className="t-2 block max-[600px]:hidden">{row.place.name}</span>
+          </>
+        ) : (
+          <span className="t-2">{words.notHere}</span>
+        ),
+    },
+    {
+      id: 'weight',
+      heading: words.weight,
+      sort: true,
+      number: true,
+      cell: (row) =>
+        row.newestWeight ? (
+          <>
+            <Quantity of={weightOfOne(row.newestWeight, p.massUnit)} />
+            <span className="t-note block">{sayDayOrTime(row.newestWeight.happenedAt, p.zone, p.now)}</span>
+          </>
+        ) : (
+          ''
+        ),
+    },
+    {
+      id: 'arrived',
+      heading: words.since,
+      sort: true,
+      className: 'pl-5',
+      cell: (row) => (row.since ? sayDayOrTime(row.since, p.zone, p.now) : ''),
+    },
+    { id: 'standing', heading: words.standing, cell: (row) => <Standing animal={row} /> },
+  ]
+}
+
+const oneOf = <T extends string>(known: readonly T[], said: string | undefined): T | undefined =>
+  known.find((one) => one === said)
+
+/** Every animal and group. Search, filters, order and page stand in the address. */
+export function AnimalList({ acts }: { acts?: ReactNode }) {
+  const me = useMe()
+  const list = useListState()
+  const now = useFacilityNow(me.facility.zone)
+  const [typed, setTyped] = useState(list.get('q') ?? '')
+  const filter: AnimalListQuery = {
+    q: list.get('q'),
+    group: oneOf(groups, list.get('group')),
+    form: oneOf(forms, list.get('form')),
+    place: list.get('place'),
+    area: list.get('area'),
+    state: oneOf(states, list.get('state')),
+    sort: oneOf(animalSorts, list.get('sort')),
+    direction: oneOf(['asc', 'desc'] as const, list.get('direction')),
+  }
+  const query = useQuery(animalListQuery({ ...filter, cursor: list.cursor }))
+  const reply = query.data
+  const filtered = Boolean(
+    filter.q ?? filter.group ?? filter.form ?? filter.place ?? filter.area ?? filter.state,
+  )
+  const { nextCursor } = reply ?? {}
+  const search = () => {
+    if (typed.trim() !== (list.get('q') ?? '')) list.set({ q: typed.trim() || undefined })
+  }
+
+  return (
+    <Sheet recipe="list">
+      <Area>
+        <Cartouche place={words.title} title={words.listTitle} source={words.listSource({ at: now.time })} />
+        <form
+          className="pane stack"
+          role="search"
+          onSubmit={(event) => {
+            event.preventDefault()
+            search()
+          }}
+        >
+          <TextField
+            label={words.find}
+            type="search"
+            value={typed}
+            maxLength={200}
+            onChange={(event) => setTyped(event.target.value)}
+            onBlur={search}
+          />
+          <SelectField
+            label={words.group}
+            startsEmpty={false}
+            options={[
+              { value: '', label: words.allGroups },
+              ...groups.map((value) => ({ value, label: taxonGroupNames[value] })),
+            ]}
+            value={filter.group ?? ''}
+            onChange={(event) => list.set({ group: event.target.value })}
+          />
+          <SelectField
+            label={words.form}
+            startsEmpty={false}
+            options={[
+              { value: '', label: words.bothForms },
+              { value: 'individual', label: words.individuals },
+              { value: 'group', label: words.groups },
+            ]}
+            value={filter.form ?? ''}
+            onChange={(event) => list.set({ form: event.target.value })}
+          />
+          <SelectField
+            label={words.state}
+            startsEmpty={false}
+            options={[
+              { value: '', label: words.stateHere },
+              { value: 'gone', label: words.stateGone },
+              { value: 'all', label: words.stateAll },
+            ]}
+            value={filter.state ?? ''}
+            onChange={(event) => list.set({ state: event.target.value })}
+          />
+        </form>
+        <div className="pane stack justify-items-start">
+          {acts}
+          <a className="btn" href={addressOf(listAnimalsCsv, {}, { ...filter })} download>
+            <Download className="icon" aria-hidden="true" />
+            {words.downloadCsv}
+          </a>
+        </div>
+      </Area>
+      <Area className="pane">
+        <DataTable
+          label={words.listTitle}
+          columns={columnsOf({
+            zone: me.facility.zone,
+            now: new Date(query.dataUpdatedAt || Date.now()).toISOString(),
+            massUnit: me.preferences['massUnit'],
+          })}
+          rows={reply?.rows ?? []}
+          rowKey={(row) => row.id}
+          sort={{ column: filter.sort ?? 'accession', direction: filter.direction ?? 'asc' }}
+          onSort={({ column, direction }) => list.set({ sort: column, direction })}
+          paging={{
+            kind: 'server',
+            from: list.from,
+            total: reply?.total ?? 0,
+            onBefore: list.before,
+            onNext: nextCursor ? () => list.next(nextCursor, reply?.rows.length ?? 0) : undefined,
+          }}
+          old={isProblem(query.error) && reply !== undefined}
+          above={
+            isProblem(query.error) ? (
+              <ListUnreadable
+                why={query.error.says}
+                code={query.error.requestId}
+                onRetry={() => void query.refetch()}
+              />
+            ) : undefined
+          }
+          instead={
+            query.isPending ? (
+              <ListFetching what={words.whatAnimals} />
+            ) : reply?.rows.length === 0 ? (
+              <ListEmpty
+                title={filtered ? words.noneTitle : words.noneYetTitle}
+                act={
+                  filtered ? (
+                    <Button
+                      onClick={() => {
+                        setTyped('')
+                        list.set({
+                          q: undefined,
+                          group: undefined,
+                          form: undefined,
+                          place: undefined,
+                          area: undefined,
+                          state: undefined,
+                        })
+                      }}
+                    >
+                      {words.showAll}
+                    </Button>
+                  ) : undefined
+                }
+              >
+                {filtered ? words.none : words.noneYet}
+              </ListEmpty>
+            ) : undefined
+          }
+        />
+      </Area>
+    </Sheet>
+  )
+}

@@ -1,0 +1,16 @@
+import { useState } from 'react'
+import { clientWords } from '../../shared/messages/client.ts'
+import { instantOfMoment, localMomentOf } from './local-moment.ts'
+import { useMe } from './me.ts'
+
+/** The "when" of a form: opens on now, facility time, and gives the instant that is meant. */
+export function useMoment() {
+  const { zone } = useMe().facility
+  const [opened] = useState(() => new Date().toISOString())
+  const [moment, setMoment] = useState(() => localMomentOf(opened, zone))
+  // While the minute stands as it opened, the instant is the one of opening, seconds and all
+  const instant = moment === localMomentOf(opened, zone) ? opened : instantOfMoment(moment, zone)
+  return { zone, moment, setMoment, instant, missing: instant === null ? clientWords.typeTime : undefined }
+}
+
+export type Moment = ReturnType<typeof useMoment>
