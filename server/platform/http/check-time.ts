@@ -2,6 +2,9 @@ import { problemTitles } from '../../../shared/messages/problems.ts'
 import { clockSkewMs } from '../database/happened-by.ts'
 import { Problem } from './problem.ts'
 
+/** The instant at which everything recorded so far has happened, also by a clock that goes ahead: what "now" is read at. */
+export const latestRecorded = (now: Date): Date => new Date(now.getTime() + clockSkewMs)
+
 /** The time a person gave as a Date; refused when it lies more than 5 min ahead of the server's clock. */
 export function timeNotAhead(given: string, now: Date, pointer = '/happenedAt'): Date {
   const at = new Date(given)
