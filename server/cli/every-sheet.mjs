@@ -1,0 +1,82 @@
+/**
+ * Every address of the application with somebody who works there, for whoever has to look at all of them: the contact
+ * sheet and the test of every sheet. `:code` and the like are filled with a row of `list`, the first that `where` takes.
+ *
+ * @typedef {{ name: string, as: string, address: string, list?: string, where?: (row: Record<string, unknown>) => boolean }} Sheet
+ * @type {readonly Sheet[]}
+ */
+export const everySheet = [
+  { name: 'water', as: 'tech', address: '/water' },
+  { name: 'water-map', as: 'tech', address: '/water/map' },
+  { name: 'enclosure-new', as: 'tech', address: '/water/new' },
+  { name: 'enclosure', as: 'vet', address: '/enclosures/:code', list: '/api/enclosures' },
+  { name: 'enclosure-edit', as: 'tech', address: '/enclosures/:code/edit', list: '/api/enclosures' },
+  { name: 'enclosure-measure', as: 'keeper', address: '/enclosures/:code/measure', list: '/api/enclosures' },
+  {
+    name: 'enclosure-readings',
+    as: 'keeper',
+    address: '/enclosures/:code/readings',
+    list: '/api/enclosures',
+  },
+  { name: 'enclosure-volume', as: 'tech', address: '/enclosures/:code/volume', list: '/api/enclosures' },
+  { name: 'enclosure-volumes', as: 'tech', address: '/enclosures/:code/volumes', list: '/api/enclosures' },
+  { name: 'animals', as: 'keeper', address: '/animals' },
+  {
+    name: 'animal',
+    as: 'vet',
+    address: '/animals/:accession',
+    list: '/api/animals',
+    where: (row) => row.form === 'individual',
+  },
+  {
+    name: 'group',
+    as: 'keeper',
+    address: '/animals/:accession',
+    list: '/api/animals',
+    where: (row) => row.form === 'group',
+  },
+  { name: 'register', as: 'registrar', address: '/register' },
+  { name: 'acquisition-new', as: 'registrar', address: '/register/acquisitions/new' },
+  { name: 'disposition-new', as: 'registrar', address: '/register/dispositions/new' },
+  {
+    name: 'transaction',
+    as: 'registrar',
+    address: '/register/transactions/:number',
+    list: '/api/register/transactions',
+  },
+  { name: 'history', as: 'registrar', address: '/register/histories/:accession', list: '/api/animals' },
+  { name: 'permits', as: 'registrar', address: '/register/permits' },
+  { name: 'permit-new', as: 'registrar', address: '/register/permits/new' },
+  { name: 'permit', as: 'registrar', address: '/register/permits/:number', list: '/api/register/permits' },
+  { name: 'exports', as: 'registrar', address: '/register/exports' },
+  { name: 'parties', as: 'registrar', address: '/register/parties' },
+  { name: 'check', as: 'registrar', address: '/check' },
+  {
+    name: 'check-print',
+    as: 'vet',
+    address: '/check/:fingerprint',
+    list: '/api/register/exports',
+  },
+  { name: 'settings-own', as: 'vet', address: '/settings/own' },
+  { name: 'people', as: 'admin', address: '/settings/people' },
+  { name: 'person-new', as: 'admin', address: '/settings/people/new' },
+  { name: 'person', as: 'admin', address: '/settings/people/:id', list: '/api/people' },
+  { name: 'facility', as: 'admin', address: '/settings/facility' },
+  { name: 'audit', as: 'admin', address: '/settings/audit' },
+  { name: 'not-found', as: 'keeper', address: '/nowhere' },
+]
+
+/**
+ * The address with its part filled in.
+ *
+ * @param {Sheet} sheet
+ * @param {(address: string) => Promise<Record<string, unknown>>} get the body of an answer, asked for as the sheet's person
+ * @returns {Promise<string | null>} null when the list has no such row
+ */
+export async function addressOf({ address, list, where }, get) {
+  const name = /:(\w+)/.exec(address)?.[1]
+  if (name === undefined || list === undefined) return address
+  const rows = Object.values(await get(list)).find(Array.isArray) ?? []
+  const row = rows.find((each) => where?.(each) ?? true)
+  return row ? address.replace(`:${name}`, encodeURIComponent(String(row[name]))) : null
+}
