@@ -17,8 +17,6 @@ const dayMs = 86_400_000
 
 beforeAll(async () => {
   app = await startServedApp()
-  // the browser lives in the present; so must the server it talks to
-  app.clock.set(new Date())
   for (const role of ['keeper', 'registrar', 'veterinarian'] as const) await app.as(role)
   taxonId = await aStingray(app)
   hall = await aPlace(app)

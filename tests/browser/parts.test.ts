@@ -21,7 +21,7 @@ beforeAll(async () => {
   process.env.VITE_PARTS = '1'
   await build({ root, logLevel: 'error', build: { outDir: folder, emptyOutDir: true } })
   delete process.env.VITE_PARTS
-  withParts = await startServedApp(folder)
+  withParts = await startServedApp({ pagesFolder: folder })
   app = await startServedApp()
   browser = await launchChromium()
 }, 240_000)

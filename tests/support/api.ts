@@ -7,6 +7,7 @@ import request from 'supertest'
 import { createApp } from '../../server/app.ts'
 import { compose } from '../../server/composition.ts'
 import type { Composition } from '../../server/composition.ts'
+import { seedDemo } from '../../server/demo/seed-demo.ts'
 import { entities } from '../../server/entities.ts'
 import { settableClock } from '../../server/platform/clock.ts'
 import { connectRuntime, poolOf } from '../../server/platform/database/data-source.ts'
@@ -47,18 +48,26 @@ export interface TestApi {
 export const newKey = () => randomUUID()
 const background = { actor: installation, requestId: 'test' }
 
+export interface ApiOptions {
+  smtpUrl?: string
+  jobs?: boolean
+  /** By default it stands still on the test day. */
+  clock?: TestApi['clock']
+  /** The practice scenario with its people, in place of an empty house with one person a role. */
+  demo?: boolean
+}
+
 /** The whole server on a database of its own, as the runtime role, on a fixed day, with one person a role. */
-export async function startApi(given: { smtpUrl?: string; jobs?: boolean } = {}): Promise<TestApi> {
+export async function startApi(given: ApiOptions = {}): Promise<TestApi> {
   const database = await cloneDatabase()
   const dataSource = await connectRuntime(database.runtimeUrl, entities, 6)
-  const clock = settableClock(testDay)
+  const clock = given.clock ?? settableClock(testDay)
   const dataFolder = await mkdtemp(path.join(tmpdir(), 'pratique-test-'))
+  const outside = { dataSource, clock, log: createLog('silent'), dataFolder }
+  if (given.demo) await seedDemo(outside)
   const composition = compose({
-    dataSource,
-    clock,
-    log: createLog('silent'),
-    demo: false,
-    dataFolder,
+    ...outside,
+    demo: given.demo ?? false,
     smtpUrl: given.smtpUrl ?? null,
     publicUrl: 'https://pratique.example',
   })
@@ -75,9 +84,11 @@ export async function startApi(given: { smtpUrl?: string; jobs?: boolean } = {})
     await facility.service.proposeSetting(background, key, { id, value })
     await facility.service.confirmSetting(background, key, id)
   }
-  await setSetting('facility.name', 'Harrow Point Sea Hall')
-  await setSetting('facility.zone', 'America/Halifax')
-  await setSetting('facility.jurisdictions', 'Norrell Sound')
+  if (!given.demo) {
+    await setSetting('facility.name', 'Harrow Point Sea Hall')
+    await setSetting('facility.zone', 'America/Halifax')
+    await setSetting('facility.jurisdictions', 'Norrell Sound')
+  }
 
   async function person(given: { email: string; printedName: string; roles: Role[] }): Promise<TestPerson> {
     const id = nextId()
@@ -101,7 +112,7 @@ export async function startApi(given: { smtpUrl?: string; jobs?: boolean } = {})
         jurisdiction: 'Norrell Sound',
         number: 'VL-20417',
         validFrom: '2024-01-01',
-        validUntil: '2027-09-30',
+        validUntil: '2099-09-30',
       })
     return made
   }

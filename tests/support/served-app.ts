@@ -6,6 +6,7 @@ import { ensureClientBuild } from '../../server/cli/client-build.mjs'
 import { builtPages } from '../../server/pages.ts'
 import { startApi } from './api.ts'
 import type { TestApi } from './api.ts'
+import { tickingClock } from './ticking-clock.ts'
 
 export interface ServedApp extends TestApi {
   /** Address of the running application, API and pages, on a free port of this machine. */
@@ -15,14 +16,18 @@ export interface ServedApp extends TestApi {
 const root = path.resolve(import.meta.dirname, '../..')
 
 /**
- * The whole application as a browser meets it: the test server of `startApi` with the built client in front of it. The
- * client is built once, if it is not.
+ * The whole application as a browser meets it: the test server of `startApi` with the built client in front of it, at the
+ * real time, because the page says "now" by the browser's clock. The client is built once, if it is not.
  *
- * @param pagesFolder another build of the client than the ordinary one
+ * @param given.pagesFolder another build of the client than the ordinary one
+ * @param given.demo        with the practice scenario, see `startApi`
  */
-export async function startServedApp(pagesFolder?: string): Promise<ServedApp> {
+export async function startServedApp(
+  given: { pagesFolder?: string; demo?: boolean } = {},
+): Promise<ServedApp> {
+  const { pagesFolder, demo } = given
   if (pagesFolder === undefined) await ensureClientBuild(root)
-  const api = await startApi()
+  const api = await startApi({ clock: tickingClock(), demo })
   const pages = builtPages(pagesFolder ?? path.join(root, 'dist', 'client'))
   const outer = express()
   outer.disable('x-powered-by')
