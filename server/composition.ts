@@ -16,6 +16,7 @@ import { createPermits } from './features/permits/index.ts'
 import { createQuarantine } from './features/quarantine/index.ts'
 import { createSigning } from './features/signing/index.ts'
 import { createAuthenticator, createMeReader, signInRoutes } from './features/sign-in/index.ts'
+import { createToday } from './features/today/index.ts'
 import { createWater } from './features/water/index.ts'
 import type { Clock } from './platform/clock.ts'
 import { createTransactions } from './platform/database/transactions.ts'
@@ -101,6 +102,19 @@ export function compose(outside: Outside) {
     documents,
   })
   const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
+  const today = createToday({
+    ...parts,
+    facility: facility.service,
+    people,
+    enclosures,
+    water,
+    animals,
+    quarantine,
+    permits,
+    acquisitions,
+    orders,
+    administrations,
+  })
   return {
     parts,
     authenticator,
@@ -119,6 +133,7 @@ export function compose(outside: Outside) {
     orders,
     administrations,
     quarantine,
+    today,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
       ...people.routes,
@@ -137,6 +152,7 @@ export function compose(outside: Outside) {
       ...orders.routes,
       ...administrations.routes,
       ...quarantine.routes,
+      ...today.routes,
     ],
     /** Handlers of background work, by name. */
     jobs: { ...quarantine.jobs },

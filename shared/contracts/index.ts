@@ -8,6 +8,7 @@ import * as enclosures from './enclosures.contract.ts'
 import * as counterparties from './counterparties.contract.ts'
 import * as documents from './documents.contract.ts'
 import * as exports from './exports.contract.ts'
+import * as find from './find.contract.ts'
 import * as facility from './facility.contract.ts'
 import * as formulary from './formulary.contract.ts'
 import * as doses from './doses.contract.ts'
@@ -20,6 +21,7 @@ import * as protocols from './protocols.contract.ts'
 import * as quarantine from './quarantine.contract.ts'
 import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
+import * as today from './today.contract.ts'
 import * as water from './water.contract.ts'
 import * as waterMap from './water-map.contract.ts'
 import * as waterVolumes from './water-volumes.contract.ts'
@@ -54,6 +56,8 @@ const modules = [
   caseEvents,
   observations,
   notices,
+  today,
+  find,
 ]
 
 const isContract = (value: unknown): value is Contract =>

@@ -9,6 +9,7 @@ import type { PermitsService } from '../permits/index.ts'
 import { acquisitionRoutes } from './acquisitions.routes.ts'
 import type { TransactionQueries } from './acquisitions.routes.ts'
 import { createAcquisitionsService } from './acquisitions.service.ts'
+import { readUnfinishedTransactions } from './papers-missing.reads.ts'
 import { readTransactions } from './transaction-list.reads.ts'
 import { TransactionLine, TransactionRecord, TransactionVoid } from './transaction.entity.ts'
 import { transactionsCsv } from './transactions-csv.ts'
@@ -79,6 +80,9 @@ export function createAcquisitions(
   }
   return {
     service,
+    queries,
+    /** Transactions without papers or with open permit marks, for the worklist. */
+    unfinished: (limit: number) => readUnfinishedTransactions(dataSource, limit),
     /** Every transaction of an animal or group with its own lines and permit uses, voided ones too. */
     async custodyOf(animalId: string) {
       const transactions = await readTransactionsOf(dataSource, animalId)

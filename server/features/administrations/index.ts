@@ -3,6 +3,7 @@ import type { Parts } from '../../platform/parts.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { Orders } from '../orders/index.ts'
 import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
+import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
@@ -11,6 +12,7 @@ import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
 import { presentSheet } from './present-sheet.ts'
 
+export type { RecentDoseRow } from './dose-work.reads.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow]
 
 export function createAdministrations(parts: Parts & { facility: FacilityService; orders: Orders }) {
@@ -34,5 +36,12 @@ export function createAdministrations(parts: Parts & { facility: FacilityService
     },
     due: (query) => findDueDoses({ dataSource, queries: orders.queries, now: () => clock.now() }, query),
   }
-  return { service, queries, routes: administrationRoutes(service, queries) }
+  /** What the worklist asks besides the doses that are due. */
+  const work = {
+    recentDoses: (since: Date) => readRecentDoses(dataSource, since),
+    wantedSeconds: (since: Date) => readWantedSeconds(dataSource, since),
+  }
+  return { service, queries, work, routes: administrationRoutes(service, queries) }
 }
+
+export type Administrations = ReturnType<typeof createAdministrations>

@@ -54,6 +54,7 @@ export function createAnimals(parts: Parts & { facility: FacilityService }) {
   const queries = createAnimalQueries(parts)
   return {
     service,
+    queries,
     questions: createAnimalQuestions(parts),
     routes: [
       ...animalRoutes(queries, parts.clock),

@@ -43,6 +43,7 @@ export function createEnclosures(parts: Parts) {
   }
   return {
     service,
+    queries,
     questions: createEnclosureQuestions({ dataSource }),
     routes: enclosureRoutes(service, queries),
   }

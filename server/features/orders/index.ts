@@ -19,6 +19,7 @@ import {
   OrderVersion,
   OrderVersionAnimal,
 } from './order.entity.ts'
+import { readOrderWork } from './order-work.ts'
 import { readSituation } from './order-situation.ts'
 import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
@@ -28,6 +29,7 @@ import { createOrderPrinter } from './print-order.ts'
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
 export type { SignedOrder } from './order-content.ts'
+export type { OrderWork } from './order-work.ts'
 export type { BathFactsReader } from './bath-facts.ts'
 export const orderEntities = [OrderHead, OrderVersion, OrderVersionAnimal, OrderEventRow, AgentExperience]
 
@@ -72,7 +74,15 @@ export function createOrders(parts: OrdersOutside) {
       if (error instanceof Problem && error.code === 'not-found') return null
       throw error
     })
-  return { service, queries, judge, print, routes: orderRoutes({ service, queries, situation, now, print }) }
+  return {
+    service,
+    queries,
+    judge,
+    print,
+    /** Orders with something to decide, for the worklist. */
+    work: () => readOrderWork(dataSource, now().toISOString()),
+    routes: orderRoutes({ service, queries, situation, now, print }),
+  }
 }
 
 export type Orders = ReturnType<typeof createOrders>

@@ -2,7 +2,10 @@ import type { Db } from '../../platform/database/db.ts'
 import type { SignedIn } from '../../platform/http/guard.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { presentLicence } from './people.present.ts'
-import { readPerson } from './people.reads.ts'
+import { readPeople, readPerson } from './people.reads.ts'
+
+/** An institution has tens of people; more than this are not gone through. */
+const mostAccounts = 1000
 
 /** A licence that counts on the day of the act, as it stands on what is signed. */
 export interface ValidLicence {
@@ -37,6 +40,25 @@ export function createPeopleQuestions(parts: { dataSource: Db; now(): Date; faci
         ? { jurisdiction: valid.jurisdiction, number: valid.number, validUntil: valid.valid_until }
         : null
       return found
+    },
+    /** Every open account with its roles, its last sign-in and the end of the longest licence valid now, by name. */
+    async accounts(at: Date) {
+      const today = {
+        on: await parts.facility.dateOf(at),
+        accepted: await parts.facility.acceptedJurisdictions(),
+      }
+      const { rows } = await readPeople(parts.dataSource, { active: 'yes', offset: 0, limit: mostAccounts })
+      return rows.map((row) => {
+        const valid = row.licences.find((licence) => presentLicence(licence, today).state === 'valid')
+        return {
+          personId: row.id,
+          printedName: row.printed_name,
+          roles: row.roles,
+          lastSignInAt: row.last_sign_in_at?.toISOString() ?? null,
+          createdAt: row.created_at.toISOString(),
+          licenceUntil: valid?.valid_until ?? null,
+        }
+      })
     },
   }
 }

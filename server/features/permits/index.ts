@@ -71,7 +71,7 @@ export function createPermits(
     },
     document: documents.documentOf,
   }
-  return { service, routes: permitRoutes(service, documents.service, queries) }
+  return { service, queries, routes: permitRoutes(service, documents.service, queries) }
 }
 
 export type Permits = ReturnType<typeof createPermits>

@@ -9,6 +9,7 @@ import type { Water } from '../water/index.ts'
 import { CaseEventRow, CaseMemberRow, CaseRow, CaseStepRecordRow } from './case.entity.ts'
 import { createCaseEventsService } from './case-events.service.ts'
 import { createCaseWriter } from './case-writer.ts'
+import { readLastLooksOfCases } from './last-looks.reads.ts'
 import { createCasesService } from './cases.service.ts'
 import { NoticeActRow, NoticeDeliveryRow, NoticeRow } from './notice.entity.ts'
 import {
@@ -71,6 +72,10 @@ export function createQuarantine(
   return {
     services: { cases, events, protocols, observations, notices },
     queries,
+    /** Observations, rounds and urgent calls, for screens and the worklist. */
+    observationQueries,
+    /** When each case was last looked at in each of its enclosures. */
+    lastLooks: (since: Date) => readLastLooksOfCases(parts.dataSource, since),
     routes: [
       ...quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
       ...observationRoutes({ observations, notices, queries: observationQueries }),

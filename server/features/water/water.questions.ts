@@ -13,6 +13,7 @@ import type { Db } from '../../platform/database/db.ts'
 import { placeReads } from '../enclosures/index.ts'
 import { readParameterSince } from './measurement.reads.ts'
 import { readWholeWaterMap } from './read-water-map.ts'
+import { readVolumeWork } from './volume-work.reads.ts'
 import { determinationOf } from './volume-now.ts'
 import { readEnclosureWater } from './water-at.ts'
 import type { EnclosureWater } from './water-at.ts'
@@ -186,6 +187,10 @@ export function createWaterQuestions(parts: { dataSource: Db }) {
     ): Promise<{ canonicalValue: number; at: string }[]> {
       const rows = await readParameterSince(db, waterBodyIds, parameter, from, until)
       return rows.map((row) => ({ canonicalValue: row.canonical_value, at: row.happened_at.toISOString() }))
+    },
+    /** Volumes that wait for a second person, or that are to be checked again by a day. */
+    volumeWork(checkUntilOn: string, db: Db = parts.dataSource) {
+      return readVolumeWork(db, checkUntilOn)
     },
     /** The whole map with its open/shut ledger, as the engines of clocks and tracing take it. */
     waterMap(db: Db = parts.dataSource): Promise<WaterMap> {

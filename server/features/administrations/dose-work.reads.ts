@@ -1,0 +1,77 @@
+import type { Db } from '../../platform/database/db.ts'
+
+export interface RecentDoseRow {
+  id: string
+  number: string
+  dose_key: string
+  kind: 'given' | 'recorded' | 'withheld' | 'refused'
+  agent: string
+  enclosure_code: string
+  amount_entered_value: string | null
+  amount_entered_unit: string | null
+  contact_minutes: number | null
+  has_exceptions: boolean
+  happened_at: Date
+  recorded_at: Date
+  by_name: string
+  stop_at: Date | null
+  stop_cause: 'time-up' | 'stopped' | null
+  stop_seen: string | null
+  stop_by: string | null
+}
+
+/** Doses that happened or were entered since an instant, and every bath that has not ended, in time order. */
+export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
+  return db.query(
+    `SELECT d.id, o.number, d.dose_key, d.kind, v.agent, c.code AS enclosure_code, d.amount_entered_value,
+            d.amount_entered_unit, v.contact_minutes, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
+            d.recorded_at, p.printed_name AS by_name, s.happened_at AS stop_at, s.cause AS stop_cause,
+            s.seen AS stop_seen, q.printed_name AS stop_by
+       FROM doses d
+       JOIN order_versions v ON v.id = d.order_version_id
+       JOIN orders o ON o.id = v.order_id
+       JOIN enclosures c ON c.id = o.enclosure_id
+       JOIN people p ON p.id = d.recorded_by
+       LEFT JOIN LATERAL (SELECT * FROM bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
+       LEFT JOIN people q ON q.id = s.recorded_by
+      WHERE d.happened_at >= $1 OR d.recorded_at >= $1
+         OR (v.contact_minutes IS NOT NULL AND d.kind IN ('given', 'recorded') AND s.id IS NULL)
+      ORDER BY d.happened_at, d.id`,
+    [since],
+  )
+}
+
+export interface WantedSecondRow {
+  number: string
+  dose_key: string
+  agent: string
+  enclosure_code: string
+  first_at: Date
+  first_by: string
+  first_by_name: string
+}
+
+/**
+ * Doses worked out once since an instant and not a second time in agreement, of the version in force, not yet recorded.
+ */
+export function readWantedSeconds(db: Db, since: Date): Promise<WantedSecondRow[]> {
+  return db.query(
+    `SELECT o.number, f.dose_key, v.agent, c.code AS enclosure_code, f.recorded_at AS first_at,
+            f.recorded_by AS first_by, p.printed_name AS first_by_name
+       FROM dose_calculations f
+       JOIN order_versions v ON v.id = f.order_version_id
+       JOIN orders o ON o.id = v.order_id
+       JOIN enclosures c ON c.id = o.enclosure_id
+       JOIN people p ON p.id = f.recorded_by
+      WHERE f.part = 'first' AND f.recorded_at >= $1
+        AND NOT EXISTS (SELECT 1 FROM order_versions n WHERE n.order_id = o.id AND n.version_no > v.version_no)
+        AND NOT EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued')
+        AND NOT EXISTS (SELECT 1 FROM doses d WHERE d.order_version_id = v.id AND d.dose_key = f.dose_key)
+        AND NOT EXISTS (SELECT 1 FROM dose_calculations l
+                         WHERE l.order_version_id = v.id AND l.dose_key = f.dose_key
+                           AND ((l.part = 'first' AND (l.recorded_at, l.id) > (f.recorded_at, f.id))
+                             OR (l.part = 'second' AND l.agrees AND l.recorded_at >= f.recorded_at)))
+      ORDER BY f.recorded_at`,
+    [since],
+  )
+}

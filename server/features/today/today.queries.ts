@@ -1,0 +1,109 @@
+import type { ReplyOf } from '../../../shared/contracts/contract.ts'
+import type { getToday, TodayWork } from '../../../shared/contracts/today.contract.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
+import { sortToday } from '../../../shared/domain/today/sort-today.ts'
+import { isForRoles, todayKindNames, todayKinds } from '../../../shared/domain/today/today-kinds.ts'
+import type { TodayKind, TodayLane } from '../../../shared/domain/today/today-kinds.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import type { TodayParts } from './index.ts'
+import { gatherDiscrepancies } from './gather-discrepancies.ts'
+import { gatherDoses } from './gather-doses.ts'
+import { gatherFlagged, gatherNotices } from './gather-observations.ts'
+import { gatherOrders } from './gather-orders.ts'
+import { gatherOwnLicence, gatherPeople } from './gather-people.ts'
+import { gatherQuarantine } from './gather-quarantine.ts'
+import { gatherRegister } from './gather-register.ts'
+import { gatherWater } from './gather-water.ts'
+import { todayLog } from './today-log.ts'
+import type { Moment } from './work.ts'
+
+const mostCases = 200
+const mostFlagged = 100
+const loggedObservations = 40
+const looksSinceDays = 60
+const msPerDay = 86_400_000
+
+/** Asks only for what stands in some lane of the reader, everything at once. */
+export function createTodayQueries(parts: TodayParts) {
+  const { clock, facility, quarantine, orders, administrations } = parts
+
+  async function gatherCases(moment: Moment): Promise<TodayWork[]> {
+    const [board, looks] = await Promise.all([
+      quarantine.queries.board({ view: 'running', limit: mostCases }),
+      quarantine.lastLooks(new Date(moment.now.getTime() - looksSinceDays * msPerDay)),
+    ])
+    return gatherQuarantine(
+      board,
+      looks.map((row) => ({
+        number: row.number,
+        enclosure: row.enclosure_code,
+        at: row.last_at.toISOString(),
+        by: row.by_name ?? '',
+      })),
+      moment,
+    )
+  }
+
+  return {
+    async today(actor: Actor): Promise<ReplyOf<typeof getToday>> {
+      const now = clock.now()
+      const zone = await facility.zone()
+      const at = now.toISOString()
+      const moment: Moment = { now, at, on: facilityDateOf(at, zone), zone, actor }
+      const sees = (kind: TodayKind) => isForRoles(kind, actor.roles)
+      const seesLane = (lane: TodayLane) =>
+        todayKindNames.some((kind) => todayKinds[kind].lane === lane && sees(kind))
+      const none = Promise.resolve([])
+      const readsOrders = decide('order.read', actor.roles).allowed
+      const seesTanks = seesLane('decide') || seesLane('doses') || seesLane('watch')
+
+      const [doses, orderWork, cases, notices, flagged, recent, water, register, discrepancies, people, own] =
+        await Promise.all([
+          readsOrders && seesTanks ? gatherDoses(administrations, moment) : { items: [], recent: [] },
+          readsOrders && seesTanks ? orders.work() : none,
+          seesTanks ? gatherCases(moment) : none,
+          sees('urgent-call') ? quarantine.observationQueries.notices(true) : none,
+          sees('observation-flagged')
+            ? quarantine.observationQueries.observations({ waiting: 'yes', limit: mostFlagged })
+            : { rows: [] },
+          seesTanks
+            ? quarantine.observationQueries.observations({ limit: loggedObservations })
+            : { rows: [] },
+          sees('volume-to-confirm') ? gatherWater(parts.water.questions, moment) : none,
+          seesLane('register') ? gatherRegister(parts, moment) : none,
+          sees('discrepancy-veterinarian') || sees('discrepancy-registrar')
+            ? parts.animals.queries.discrepancies({ state: 'open', limit: mostFlagged })
+            : { rows: [] },
+          seesLane('people')
+            ? Promise.all([parts.people.questions.accounts(now), facility.listSettings()])
+            : null,
+          sees('own-licence') ? gatherOwnLicence(parts.people, moment) : none,
+        ])
+
+      const items = [
+        ...doses.items,
+        ...gatherOrders(orderWork, moment),
+        ...cases,
+        ...gatherNotices(notices, moment),
+        ...gatherFlagged(flagged.rows, moment),
+        ...water,
+        ...register,
+        ...gatherDiscrepancies(discrepancies.rows, moment),
+        ...(people ? gatherPeople(...people, moment) : []),
+        ...own,
+      ]
+      return {
+        at,
+        on: moment.on,
+        items: sortToday(
+          items.filter(({ kind }) => sees(kind)),
+          zone,
+        ),
+        log: todayLog(recent.rows, doses.recent, moment),
+      }
+    },
+  }
+}
+
+export type TodayQueries = ReturnType<typeof createTodayQueries>
