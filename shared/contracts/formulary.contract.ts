@@ -14,6 +14,7 @@ export const lotEventKinds = [
   'precipitate',
   'returned-to-use',
   'used-up',
+  'looked-at',
 ] as const
 
 export const Lot = z.object({
@@ -24,6 +25,7 @@ export const Lot = z.object({
   state: z
     .enum(['usable', 'expired', 'recalled', 'set-aside', 'stored-cold', 'precipitate', 'used-up'])
     .describe('Whether it may be used today, and if not why'),
+  foundClearAt: Instant.nullable().describe('When somebody last looked at it and found it clear'),
 })
 export type Lot = z.infer<typeof Lot>
 

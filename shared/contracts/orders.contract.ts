@@ -65,7 +65,7 @@ export const BathOrderFields = z
   .describe('An order for a bath')
 export type BathOrderFields = z.infer<typeof BathOrderFields>
 
-const Line = z.object({
+export const SaidLine = z.object({
   key: z.string().describe('Names the line within its working'),
   label: z.string().describe('What the line works out, in words'),
   expression: z.string().describe('The arithmetic with its numbers and units'),
@@ -75,7 +75,7 @@ const Line = z.object({
   result: z.string().describe('The answer as shown'),
 })
 
-const SaidCaution = z.object({
+export const SaidCaution = z.object({
   ruleId: z.string().describe('Rule that fired'),
   code: z.string().describe('What it found'),
   level: z.enum(['stop', 'warning', 'note']).describe('How grave it is'),
@@ -88,7 +88,7 @@ const SaidCaution = z.object({
 })
 export type SaidCaution = z.infer<typeof SaidCaution>
 
-const SaidCondition = z.object({
+export const SaidCondition = z.object({
   ruleId: z.string().describe('Rule that is judged at the dose'),
   level: z.enum(['stop', 'warning', 'note']).describe('How grave it is when it is not met'),
   text: z.string().describe('What has to be true before the first gram'),
@@ -136,7 +136,7 @@ export const OrderPreview = z.object({
     })
     .nullable()
     .describe('Why there is no amount'),
-  working: z.array(Line).describe('Working of the amount'),
+  working: z.array(SaidLine).describe('Working of the amount'),
   water: OrderWater.describe('Connected water and everybody in it'),
   cautions: z.array(SaidCaution).describe('Cautions, the gravest first'),
   conditions: z.array(SaidCondition).describe('What has to be true before each dose'),
@@ -183,6 +183,18 @@ const OrderEvent = z.object({
   by: z.string().describe('Who did it'),
 })
 
+const CalendarDose = z.object({
+  key: z.string().describe('Which planned dose: 1, 2 …'),
+  dueAt: Instant.describe('When it is planned'),
+  opensAt: Instant.describe('Earliest time at which it is not early'),
+  closesAt: Instant.describe('Latest time at which it is not late'),
+  recorded: z
+    .enum(['given', 'recorded', 'withheld', 'refused'])
+    .nullable()
+    .describe('What was recorded of it last; null: nothing yet'),
+  recordedAt: Instant.nullable().describe('When that happened'),
+})
+
 export const SignedVersion = z.object({
   versionNo: z.int().describe('Version'),
   signature: SignatureBlock.describe('Who signed it, and whether the text is still what was signed'),
@@ -197,11 +209,20 @@ export const Order = OrderRow.extend({
   createdAt: Instant.describe('When it was written first'),
   versions: z.array(SignedVersion).describe('Signed versions, the newest first'),
   events: z.array(OrderEvent).describe('Holds and ends, the newest first'),
+  calendar: z.array(CalendarDose).describe('Doses that the signed version in force plans, in time order'),
   may: May,
 })
 export type Order = z.infer<typeof Order>
 
 const orderParams = z.strictObject({ number: OrderNumber })
+
+const orderList = listQuery(['number', 'startsAt', 'enclosure', 'signedAt']).extend({
+  phase: z
+    .enum([...orderPhases, 'open'])
+    .optional()
+    .describe('Only orders that stand here; open: not ended'),
+  enclosureCode: z.string().max(40).optional().describe('Only orders for this enclosure'),
+})
 
 export const listOrders = contract({
   id: 'listOrders',
@@ -209,15 +230,21 @@ export const listOrders = contract({
   path: '/orders',
   action: 'order.read',
   summary: 'Treatment orders',
-  query: listQuery(['number', 'startsAt', 'enclosure', 'signedAt']).extend({
-    phase: z
-      .enum([...orderPhases, 'open'])
-      .optional()
-      .describe('Only orders that stand here; open: not ended'),
-    enclosureCode: z.string().max(40).optional().describe('Only orders for this enclosure'),
-  }),
+  query: orderList,
   reply: { 200: page(OrderRow) },
   problems: [],
+})
+
+export const listOrdersCsv = contract({
+  id: 'listOrdersCsv',
+  method: 'get',
+  path: '/orders.csv',
+  action: 'order.read',
+  summary: 'The list of orders as it is shown, every page, as CSV',
+  query: orderList.omit({ cursor: true, limit: true }),
+  reply: { 200: z.null() },
+  problems: [],
+  produces: 'csv',
 })
 
 export const getOrder = contract({

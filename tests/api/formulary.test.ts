@@ -127,6 +127,12 @@ describe('the formulary', () => {
       tech.agent.post(`/api/lots/${lotId}/events`).send({ id: api.nextId(), kind, happenedAt })
     const cold = await note('stored-cold', '2026-11-20T10:00:00-04:00').expect(201)
     expect(states(cold.body.lots)[2]).toBe('A3 stored-cold')
+    // a look is kept, and lifts no fault
+    const looked = await note('looked-at', '2026-11-20T12:00:00-04:00').expect(201)
+    expect(looked.body.lots[2]).toMatchObject({
+      state: 'stored-cold',
+      foundClearAt: '2026-11-20T16:00:00.000Z',
+    })
     const back = await note('returned-to-use', '2026-11-21T10:00:00-04:00').expect(201)
     expect(states(back.body.lots)[2]).toBe('A3 usable')
     expect((await note('recalled', '2026-12-02T10:00:00-04:00').expect(422)).body.code).toBe('in-the-future')

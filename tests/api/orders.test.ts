@@ -2,8 +2,10 @@ import { execFileSync } from 'node:child_process'
 import { mkdtempSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import path from 'node:path'
+import { parse } from 'csv-parse/sync'
 import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { SignedBathOrder } from '../../shared/contracts/signed-order.ts'
 import { aTaxon, anAnimal } from '../builders/a-collection.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
@@ -155,6 +157,48 @@ describe('an order for a bath', () => {
     // 125 µL/L × 2,181.4 L = 272.675 mL (worked by hand)
     expect(within.amount.measured).toEqual({ value: '273', unit: 'mL' })
     expect(within.conditions.map((condition: { ruleId: string }) => condition.ruleId)).toContain('R01')
+    // R07: somebody looked at the bottle today; without a look, or with one of another day, nobody knows
+    const storage = (shown: { conditions: { ruleId: string }[] }) =>
+      shown.conditions.find((condition) => condition.ruleId === 'R07')
+    expect(storage(within)).toMatchObject({ state: 'met' })
+    const { agent } = await api.as('technician')
+    const unseen = api.nextId()
+    await agent
+      .post(`/api/products/${formalin.id}/lots`)
+      .send({ id: unseen, lotNumber: 'FO-2', expiresOn: '2027-03-31', receivedOn: '2026-01-10' })
+      .expect(201)
+    expect(storage(await preview({ ...fields('125'), lotId: unseen }))).toMatchObject({ state: 'unknown' })
+    await agent
+      .post(`/api/lots/${unseen}/events`)
+      .send({ id: api.nextId(), kind: 'looked-at', happenedAt: '2026-11-30T14:00:00Z' })
+      .expect(201)
+    expect(storage(await preview({ ...fields('125'), lotId: unseen }))).toMatchObject({ state: 'unknown' })
+  })
+
+  it('says a reading with the digits of its instrument', async () => {
+    const water = await aBathWater(api, 'QT-8')
+    const fish = await aSchool(api, water.id, 8)
+    await readingsNow(api, water.waterBodyId, { 'dissolved-oxygen': ['4.0', 'mg/L'], ph: ['9.0', 'pH'] })
+    const permanganate = await aProduct(api, {
+      agent: 'potassium-permanganate',
+      productName: 'Potassium permanganate',
+      form: 'crystals',
+      strengthBasis: 'salt',
+    })
+    const shown = await preview(
+      bathFields({
+        enclosureId: water.id,
+        animalIds: [fish.id],
+        productId: permanganate.id,
+        lotId: permanganate.lotId,
+        basis: 'salt',
+        stated: { ...bathFields({ enclosureId: water.id }).stated, waterKind: 'fresh' },
+      }),
+    )
+    const alkaline = shown.cautions.find(
+      (caution: { code: string }) => caution.code === 'permanganate-alkaline',
+    )
+    expect(alkaline.text).toContain('pH\u00a09.0')
   })
 
   it('is signed with password and valid licence, frozen, and found intact', async () => {
@@ -186,6 +230,11 @@ describe('an order for a bath', () => {
       volume: { errorPercent: expect.any(Number) },
     })
     expect((await signDraft(api, { ...draft, version: draft.version + 1 })).body.code).toBe('nothing-to-sign')
+    // what screens read of a signed text is all there
+    expect(SignedBathOrder.parse(version.content)).toMatchObject({ targetText: '2\u00a0mg/L' })
+    expect(signed.body.calendar).toMatchObject([
+      { key: '1', dueAt: '2026-12-01T19:00:00.000Z', recorded: null, recordedAt: null },
+    ])
     const trail = await owner.query(`SELECT action FROM audit_entries WHERE subject_id = $1 ORDER BY seq`, [
       draft.id,
     ])
@@ -312,5 +361,12 @@ describe('an order for a bath', () => {
       total: 0,
     })
     await agent.get('/api/orders/TO-9999').expect(404)
+    const csv = await agent.get('/api/orders.csv?phase=draft&sort=number&direction=asc').expect(200)
+    const listed = await agent.get('/api/orders?phase=draft&sort=number&direction=asc&limit=200').expect(200)
+    const rows = parse(csv.text, { columns: true, bom: true }) as { number: string }[]
+    expect(rows.map((row) => row.number)).toEqual(
+      listed.body.rows.map((row: { number: string }) => row.number),
+    )
+    expect(rows.length).toBeGreaterThan(1)
   })
 })

@@ -86,6 +86,12 @@ export async function aProduct(api: TestApi, given: object, expiresOn = '2028-03
     .post(`/api/products/${id}/lots`)
     .send({ id: lotId, lotNumber: 'PZ-0317', expiresOn, receivedOn: '2026-01-10' })
     .expect(201)
+  // formalin is given only after somebody looked at the bottle that day
+  if (product.agent === 'formalin')
+    await agent
+      .post(`/api/lots/${lotId}/events`)
+      .send({ id: api.nextId(), kind: 'looked-at', happenedAt: '2026-12-01T14:00:00Z' })
+      .expect(201)
   return { id, lotId }
 }
 

@@ -44,6 +44,7 @@ export function presentProduct(row: ProductReadRow, on: string): Product {
       expiresOn: lot.expires_on,
       receivedOn: lot.received_on,
       state: lotState(lot.expires_on, lot.last_event, on),
+      foundClearAt: lot.found_clear_at === null ? null : new Date(lot.found_clear_at).toISOString(),
     })),
   }
 }

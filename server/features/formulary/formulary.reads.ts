@@ -64,6 +64,8 @@ export interface LotReadRow {
   received_on: string
   /** What happened to it last; null when nothing did. */
   last_event: string | null
+  /** When somebody last looked at it and found it clear; ISO 8601. */
+  found_clear_at: string | null
 }
 
 /** Products with their lots, all of them or one. */
@@ -74,8 +76,11 @@ export function readProducts(db: Db, id?: string): Promise<ProductReadRow[]> {
             coalesce((SELECT json_agg(json_build_object(
                                'id', t.id, 'lot_number', t.lot_number, 'expires_on', t.expires_on,
                                'received_on', t.received_on,
-                               'last_event', (SELECT e.kind FROM lot_events e WHERE e.lot_id = t.id
-                                               ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1))
+                               'last_event', (SELECT e.kind FROM lot_events e
+                                               WHERE e.lot_id = t.id AND e.kind <> 'looked-at'
+                                               ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1),
+                               'found_clear_at', (SELECT max(e.happened_at) FROM lot_events e
+                                                   WHERE e.lot_id = t.id AND e.kind = 'looked-at'))
                              ORDER BY t.expires_on, t.lot_number)
                         FROM product_lots t WHERE t.product_id = p.id), '[]') AS lots
        FROM products p WHERE $1::uuid IS NULL OR p.id = $1

@@ -10,6 +10,7 @@ import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
 import type { WaterFacts, WaterQuestions } from '../water/index.ts'
@@ -122,8 +123,16 @@ function animalInWater(animal: AnimalFacts): AnimalInWater {
   }
 }
 
-/** The newest reading of a parameter in any of the joined bodies. */
-function readingFact(water: WaterFacts, parameter: ReadingParameter, factor = 1): Fact<number> {
+/**
+ * The newest reading of a parameter in any of the joined bodies, in the unit of the fact. The digits of the instrument
+ * go with it where it was entered in that unit: 7.0 is said as 7.0.
+ */
+function readingFact(
+  water: WaterFacts,
+  parameter: ReadingParameter,
+  unit: UnitCode,
+  factor = 1,
+): Fact<number> {
   const newest = water.latestReadings
     .filter((reading) => reading.parameter === parameter)
     .sort((a, b) => b.at.localeCompare(a.at))[0]
@@ -132,12 +141,13 @@ function readingFact(water: WaterFacts, parameter: ReadingParameter, factor = 1)
         newest.canonicalValue * factor,
         newest.at,
         `${newest.waterBodyCode}, ${newest.value} ${newest.unit}`,
+        newest.unit === unit && !newest.below ? newest.value : undefined,
       )
     : unknown()
 }
 
 function waterKind(water: WaterFacts): CautionFacts['water']['kind'] {
-  const salinity = readingFact(water, 'salinity')
+  const salinity = readingFact(water, 'salinity', 'PSS-78')
   if (salinity.state !== 'known') return unknown()
   const kind = salinity.value < freshBelow ? 'fresh' : salinity.value >= marineFrom ? 'marine' : 'brackish'
   return { ...salinity, value: kind }
@@ -149,7 +159,7 @@ function waterFacts(
 ): CautionFacts['water'] {
   return {
     kind: waterKind(water),
-    temperatureC: readingFact(water, 'temperature'),
+    temperatureC: readingFact(water, 'temperature', 'degC'),
     recentTemperaturesC:
       temperatures.length === 0
         ? unknown()
@@ -158,12 +168,12 @@ function waterFacts(
             temperatures[0]?.at ?? null,
             'the readings of the last 4 h',
           ),
-    oxygenMgPerL: readingFact(water, 'dissolved-oxygen'),
-    pH: readingFact(water, 'ph'),
-    alkalinityMgPerLCaCO3: readingFact(water, 'alkalinity', mgCaCO3PerMeq),
-    hardnessMgPerLCaCO3: readingFact(water, 'hardness', mgCaCO3PerMeq),
-    freeCopperMgPerL: readingFact(water, 'copper-free'),
-    totalCopperMgPerL: readingFact(water, 'copper-total'),
+    oxygenMgPerL: readingFact(water, 'dissolved-oxygen', 'mg/L'),
+    pH: readingFact(water, 'ph', 'pH'),
+    alkalinityMgPerLCaCO3: readingFact(water, 'alkalinity', 'mg/L_CaCO3', mgCaCO3PerMeq),
+    hardnessMgPerLCaCO3: readingFact(water, 'hardness', 'mg/L_CaCO3', mgCaCO3PerMeq),
+    freeCopperMgPerL: readingFact(water, 'copper-free', 'mg/L'),
+    totalCopperMgPerL: readingFact(water, 'copper-total', 'mg/L'),
     oxygenIsLogged: unknown(),
     hasBloom: unknown(),
     hasPlantsOrAlgae: unknown(),

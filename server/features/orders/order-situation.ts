@@ -61,7 +61,7 @@ export function chosenOf(product: Product, line: DoseLine | null, lotId: string 
   return {
     agent: product.agent,
     product: bath,
-    lot: lot && { expiresOn: lot.expiresOn, state: lot.state },
+    lot: lot && { expiresOn: lot.expiresOn, state: lot.state, foundClearAt: lot.foundClearAt },
     line: line && {
       low: line.low,
       high: line.high,

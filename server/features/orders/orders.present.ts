@@ -2,6 +2,7 @@ import type { BathOrderFields, OrderRow } from '../../../shared/contracts/orders
 import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
 import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { SignedOrder } from './order-content.ts'
@@ -17,25 +18,27 @@ export function signedZone(row: OrderReadRow): string {
   }
 }
 
+/** The doses that the signed version in force plans; none for a draft. */
+export function plannedOf(row: OrderReadRow): PlannedDose[] {
+  if (!row.starts_at || row.doses === null) return []
+  return plannedDoses(
+    { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours },
+    signedZone(row),
+  )
+}
+
 function standingOfRow(row: OrderReadRow): OrderStanding {
-  const signed =
-    row.starts_at && row.doses !== null
-      ? plannedDoses(
-          { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours },
-          signedZone(row),
-        )
-      : null
-  const last = signed?.at(-1)
+  const signed = plannedOf(row)
+  const last = signed.at(-1)
   return {
     stage: row.stage,
-    signed:
-      signed && last
-        ? {
-            planned: signed,
-            doneKeys: row.done_keys,
-            lastWindowUntil: last.closesAt,
-          }
-        : null,
+    signed: last
+      ? {
+          planned: signed,
+          doneKeys: row.done_keys,
+          lastWindowUntil: last.closesAt,
+        }
+      : null,
     held: row.held,
     ended: row.ended,
   }

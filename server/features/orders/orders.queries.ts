@@ -11,8 +11,8 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
-import { presentOrderRow, signedZone } from './orders.present.ts'
-import { readEvents, readOrder, readOrders, readVersions } from './orders.reads.ts'
+import { plannedOf, presentOrderRow, signedZone } from './orders.present.ts'
+import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
 
 export interface OrderQueriesParts {
   dataSource: Db
@@ -55,8 +55,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
   }
 
   return {
-    async list(query: QueryOf<typeof listOrders>) {
-      const page = pageOf(query)
+    /** Every order that matches, sorted. */
+    async find(query: Omit<QueryOf<typeof listOrders>, 'cursor' | 'limit'>): Promise<OrderRow[]> {
       const now = parts.now().toISOString()
       const rows = (await readOrders(parts.dataSource, query)).map((row) => presentOrderRow(row, now))
       const { phase } = query
@@ -66,6 +66,12 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const key = sortKeys[query.sort ?? 'number']
       const sign = query.direction === 'asc' ? 1 : -1
       if (key) found.sort((a, b) => sign * key(a).localeCompare(key(b)))
+      return found
+    },
+
+    async list(query: QueryOf<typeof listOrders>) {
+      const page = pageOf(query)
+      const found = await this.find(query)
       return {
         rows: found.slice(page.offset, page.offset + page.limit),
         total: found.length,
@@ -75,9 +81,10 @@ export function createOrderQueries(parts: OrderQueriesParts) {
 
     async order(number: string, actor: Actor): Promise<Order> {
       const row = await rowOf(number)
-      const [versions, events] = await Promise.all([
+      const [versions, events, recorded] = await Promise.all([
         readVersions(parts.dataSource, row.id),
         readEvents(parts.dataSource, row.id),
+        readRecordedDoses(parts.dataSource, row.id),
       ])
       const sealed = await Promise.all(
         versions.map(async (version) => ({
@@ -104,6 +111,17 @@ export function createOrderQueries(parts: OrderQueriesParts) {
           happenedAt: event.happened_at.toISOString(),
           by: event.by_name ?? '',
         })),
+        calendar: plannedOf(row).map(({ key, dueAt, opensAt, closesAt }) => {
+          const last = recorded.find((dose) => dose.dose_key === key)
+          return {
+            key,
+            dueAt,
+            opensAt,
+            closesAt,
+            recorded: last?.kind ?? null,
+            recordedAt: last?.happened_at.toISOString() ?? null,
+          }
+        }),
         may: mayBe.filter((action) => decide(action, actor.roles).allowed),
       }
     },

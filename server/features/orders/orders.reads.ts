@@ -103,3 +103,18 @@ export function readEvents(db: Db, orderId: string): Promise<EventReadRow[]> {
     [orderId],
   )
 }
+
+export interface RecordedDoseRow {
+  dose_key: string
+  kind: 'given' | 'recorded' | 'withheld' | 'refused'
+  happened_at: Date
+}
+
+/** What was recorded of the planned doses, over all versions of an order, the newest first. */
+export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDoseRow[]> {
+  return db.query(
+    `SELECT d.dose_key, d.kind, d.happened_at FROM doses d JOIN order_versions v ON v.id = d.order_version_id
+      WHERE v.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
+    [orderId],
+  )
+}

@@ -1,7 +1,9 @@
 import * as contracts from '../../../shared/contracts/orders.contract.ts'
+import { csvReply } from '../../platform/http/csv-reply.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import { ordersCsvColumns } from './orders-csv.ts'
 import { readSituation } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
 import type { OrderQueries } from './orders.queries.ts'
@@ -20,6 +22,9 @@ export interface OrderRouteParts {
 export function orderRoutes({ service, queries, situation, now, print }: OrderRouteParts): Route[] {
   return [
     route(contracts.listOrders, ({ query }) => queries.list(query)),
+    route(contracts.listOrdersCsv, async ({ query }) =>
+      csvReply('orders.csv', ordersCsvColumns, await queries.find(query)),
+    ),
     route(contracts.getOrder, ({ params, context }) => queries.order(params.number, context.actor)),
     route(contracts.previewOrder, async ({ body }) =>
       presentPreview(body, await readSituation(situation, body, now())),

@@ -37,6 +37,6 @@ export interface StatedFacts {
 export interface ChosenProduct {
   agent: AgentCode
   product: BathProduct
-  lot: { expiresOn: FacilityDate; state: string } | null
+  lot: { expiresOn: FacilityDate; state: string; foundClearAt: Instant | null } | null
   line: (DefaultRange & { longestContactMinutes: number | null }) | null
 }

@@ -2,6 +2,7 @@ import type { CautionFacts } from '../cautions/caution-facts.ts'
 import { known, notApplicable, unknown } from '../cautions/fact.ts'
 import type { Fact } from '../cautions/fact.ts'
 import type { BathDose } from '../dose/bath-dose.ts'
+import { facilityDateOf } from '../time/facility-date.ts'
 import { addHours } from '../time/instant-arithmetic.ts'
 import { parseQuantity } from '../units/parse-quantity.ts'
 import { findUnit } from '../units/find-unit.ts'
@@ -30,7 +31,22 @@ function targetFact({ target }: BathOrderDraft): CautionFacts['order']['target']
 
 const storageFaults = ['stored-cold', 'precipitate']
 
-function lotFacts(chosen: ChosenProduct): CautionFacts['lot'] {
+/**
+ * Whether the container was kept too cold or shows a precipitate. That nothing was noted says nothing: it is unknown
+ * until somebody looked at the bottle on the day it is used.
+ *
+ * @source common practice for the day of use, no source
+ */
+function storageFault({ lot }: ChosenProduct, { at, zone }: BathFacts): Fact<boolean> {
+  if (!lot) return unknown()
+  if (storageFaults.includes(lot.state)) return known(true, null, 'the lot')
+  const { foundClearAt } = lot
+  return foundClearAt !== null && facilityDateOf(foundClearAt, zone) === facilityDateOf(at, zone)
+    ? known(false, foundClearAt, 'a look at the container')
+    : unknown()
+}
+
+function lotFacts(chosen: ChosenProduct, base: BathFacts): CautionFacts['lot'] {
   const { lot, product } = chosen
   const density =
     product.density === undefined ? null : parseQuantity(product.density, { dimension: 'density', above: 0 })
@@ -40,7 +56,7 @@ function lotFacts(chosen: ChosenProduct): CautionFacts['lot'] {
     expiresOn: lot ? known(lot.expiresOn, null, 'the lot') : unknown(),
     beyondUseOn: notApplicable(),
     status: lot ? known(lotStatus(lot.state), null, 'the lot') : unknown(),
-    storageFault: lot ? known(storageFaults.includes(lot.state), null, 'the lot') : unknown(),
+    storageFault: storageFault(chosen, base),
     densityGPerMl: density?.ok ? known(density.value.value, null, 'the label') : notApplicable(),
   }
 }
@@ -111,7 +127,7 @@ export function orderFacts(
               'the order',
             ),
     },
-    lot: lotFacts(chosen),
+    lot: lotFacts(chosen, base),
     water: {
       ...base.water,
       kind: fill(base.water.kind, said.waterKind),
