@@ -29,6 +29,7 @@ export const paths = {
   orders: () => '/orders',
   newOrder: () => '/orders/new',
   order: (number: string) => `/orders/${part(number)}`,
+  editOrder: (number: string) => `/orders/${part(number)}/edit`,
   orderSheet: (number: string) => `/orders/${part(number)}/sheet`,
 
   pharmacy: () => '/pharmacy',

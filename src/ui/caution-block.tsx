@@ -37,7 +37,7 @@ export function CautionBlock(props: CautionBlockProps) {
       <div className="caution-body">
         {title ? <strong className="caution-title">{title}</strong> : null}
         <p>{children}</p>
-        {source ? <p className="caution-source">{source}</p> : null}
+        {source ? <div className="caution-source">{source}</div> : null}
         {cannotOverride ? <p>{partWords.cannotBeOverridden}</p> : null}
         {answer ? (
           <div className="caution-answer">

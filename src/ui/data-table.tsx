@@ -145,6 +145,8 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
                       return (
                         <td
                           key={cell.id}
+                          // what the heading says, for lists that become cards on a phone
+                          data-heading={column?.heading}
                           className={classNames(column?.number && 'is-number', column?.className)}
                         >
                           <table.FlexRender cell={cell} />

@@ -14,7 +14,7 @@ export function Quantity({
   size = 'text',
   late = false,
 }: {
-  of: FormattedQuantity
+  of: Pick<FormattedQuantity, 'kind' | 'text' | 'number'>
   size?: 'text' | 'strong' | 'mid' | 'dose'
   /** Out of range or overdue; words beside it must say so too. */
   late?: boolean

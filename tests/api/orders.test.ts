@@ -356,6 +356,7 @@ describe('an order for a bath', () => {
     expect(open.body.rows.length).toBe(3)
     const drafts = await agent.get('/api/orders?phase=draft').expect(200)
     expect(drafts.body.rows.every((row: { phase: string }) => row.phase === 'draft')).toBe(true)
+    expect(drafts.body.rows[0].agent).toBe('praziquantel')
     expect((await agent.get('/api/orders?q=nothing-like-this').expect(200)).body).toMatchObject({
       rows: [],
       total: 0,

@@ -34,7 +34,7 @@ export interface OrderReadRow {
 const columns = `
   o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
   o.created_at, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
-  v.agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
+  coalesce(v.agent, f.agent) AS agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
   v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
              ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1), false) AS held,
@@ -49,6 +49,7 @@ const tables = `
   JOIN enclosures c ON c.id = o.enclosure_id
   LEFT JOIN people w ON w.id = o.created_by
   LEFT JOIN LATERAL (SELECT * FROM order_versions n WHERE n.order_id = o.id ORDER BY n.version_no DESC LIMIT 1) v ON true
+  LEFT JOIN products f ON v.id IS NULL AND f.id = (o.draft_text::jsonb ->> 'productId')::uuid
   LEFT JOIN people s ON s.id = v.signed_by
   LEFT JOIN signed_texts t ON t.id = v.signed_text_id`
 
@@ -62,7 +63,7 @@ export function readOrders(db: Db, filter: OrderFilter): Promise<OrderReadRow[]>
   const like = containing(filter.q)
   return db.query(
     `SELECT ${columns} ${tables}
-      WHERE ($1::text IS NULL OR o.number ILIKE $1 OR c.code ILIKE $1 OR c.name ILIKE $1 OR v.agent ILIKE $1)
+      WHERE ($1::text IS NULL OR o.number ILIKE $1 OR c.code ILIKE $1 OR c.name ILIKE $1 OR v.agent ILIKE $1 OR f.agent ILIKE $1)
         AND ($2::text IS NULL OR c.code = $2)
       ORDER BY o.number DESC`,
     [like, filter.enclosureCode ?? null],

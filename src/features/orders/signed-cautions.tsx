@@ -1,0 +1,64 @@
+import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
+import type { SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
+import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
+
+/** A key for a caution among others: a rule may fire more than once. */
+export const cautionKey = (caution: SaidCaution) => `${caution.ruleId} ${caution.code} ${caution.text}`
+
+/** Where a caution comes from and what would resolve it, one touch away. */
+export function CautionSource({ caution }: { caution: SaidCaution }) {
+  if (caution.citations.length === 0 && caution.resolve.length === 0) return null
+  return (
+    <details>
+      <summary>{words.sources}</summary>
+      <ul>
+        {caution.citations.map((citation) => (
+          <li key={citation}>{citation}</li>
+        ))}
+      </ul>
+      {caution.resolve.length > 0 ? (
+        <>
+          <b>{words.resolve}</b>
+          <ul>
+            {caution.resolve.map((one) => (
+              <li key={one}>{one}</li>
+            ))}
+          </ul>
+        </>
+      ) : null}
+    </details>
+  )
+}
+
+/** Cautions as they stood at the signature, with who read or overrode each and why. */
+export function SignedCautions({ content, signer }: { content: SignedBathOrder; signer: string }) {
+  const answerOf = (caution: SaidCaution) => {
+    const override = content.overrides.find((one) => one.ruleId === caution.ruleId)
+    if (caution.level === 'stop' && override)
+      return words.overridden({ name: signer, reason: override.reason })
+    return caution.level === 'warning' && content.read.includes(caution.ruleId)
+      ? words.wasRead({ name: signer })
+      : undefined
+  }
+  return (
+    <section className="stack">
+      <h2 className="t-head">
+        {words.cautions} <span className="t-note ml-1">{words.cautionsAtSigning}</span>
+      </h2>
+      {content.cautions.length === 0 ? <p className="t-2">{words.noCautions}</p> : null}
+      {sortCautions(content.cautions).map((caution) => (
+        <CautionBlock
+          key={cautionKey(caution)}
+          level={caution.level}
+          title={caution.title}
+          source={<CautionSource caution={caution} />}
+          answer={answerOf(caution)}
+        >
+          {caution.text}
+          {caution.secondCalculation ? ` ${words.secondPerson}` : ''}
+        </CautionBlock>
+      ))}
+    </section>
+  )
+}
