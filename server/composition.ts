@@ -78,6 +78,7 @@ export function compose(outside: Outside) {
     animals,
     water,
     enclosures,
+    documents,
     mail: parts.mail,
     publicUrl: outside.publicUrl ?? '',
   })

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
-import { Reason } from './primitives.ts'
+import { LocalDate, Reason } from './primitives.ts'
 import { caseParams, CaseDetail } from './quarantine.contract.ts'
 
 export const clearCase = contract({
@@ -14,7 +14,10 @@ export const clearCase = contract({
     password: z.string().min(1).max(200).describe('Password of the signer, again'),
     /** What the signer saw; when it has changed meanwhile nothing is signed. */
     expectedUnmet: z.array(z.string().max(60)).max(60).describe('Codes of the unmet conditions on screen'),
-    reason: Reason.optional(),
+    expectedEarliestOn: LocalDate.nullable()
+      .optional()
+      .describe('Earliest clearance on screen; when given and another now, nothing is signed'),
+    reason: Reason.optional().describe('Why it is cleared against unmet conditions'),
   }),
   reply: { 200: CaseDetail },
   problems: [
@@ -40,5 +43,5 @@ export const getCertificate = contract({
   params: caseParams,
   reply: { 200: z.string().describe('PDF') },
   produces: 'pdf',
-  problems: ['not-found'],
+  problems: ['not-found', 'broken-record'],
 })

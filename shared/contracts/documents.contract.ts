@@ -76,7 +76,7 @@ export const checkFingerprint = contract({
     200: z.object({
       fingerprint: z.string().describe('The whole fingerprint, SHA-256, hexadecimal'),
       state: z
-        .enum(['current', 'changed', 'superseded', 'held', 'discontinued', 'broken', 'unknown'])
+        .enum(['current', 'changed', 'superseded', 'held', 'discontinued', 'void', 'broken', 'unknown'])
         .describe('Whether the record still stands as printed'),
       now: z.string().nullable().describe('Version of the record now, where it differs'),
       prints: z.array(CheckedPrint).describe('Every print with this fingerprint, the newest first'),

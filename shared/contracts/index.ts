@@ -4,6 +4,7 @@ import * as animalRecords from './animal-records.contract.ts'
 import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
 import * as caseEvents from './case-events.contract.ts'
+import * as clearance from './clearance.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
 import * as counterparties from './counterparties.contract.ts'
 import * as documents from './documents.contract.ts'
@@ -54,6 +55,7 @@ const modules = [
   protocols,
   quarantine,
   caseEvents,
+  clearance,
   observations,
   notices,
   today,

@@ -38,6 +38,7 @@ export const checkWords = defineMessages({
   superseded: 'A later version has taken its place',
   held: 'What was printed is held',
   discontinued: 'What was printed has been discontinued',
+  void: 'What was printed no longer holds',
   broken: 'The signed record no longer matches its signature',
   unknown: 'This print is known, but nobody can say whether the record has changed',
   changedNow: (p: { then: string; now: string }) =>

@@ -69,7 +69,8 @@ function presentMember(
   }
 }
 
-function presentDeaths(
+/** Deaths of a batch up to the instant asked about, the newest first, with what was signed about them. */
+export function presentDeaths(
   facts: ClockFacts,
   own: readonly CaseEventReadRow[],
   batch: readonly BatchReadRow[],

@@ -1,6 +1,8 @@
 import type { Parts } from '../../platform/parts.ts'
 import type { Animals } from '../animals/index.ts'
+import type { Documents } from '../documents/index.ts'
 import type { Mail } from '../../platform/mail/mail.ts'
+import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Enclosures } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { People } from '../people/index.ts'
@@ -10,6 +12,8 @@ import { CaseEventRow, CaseMemberRow, CaseRow, CaseStepRecordRow } from './case.
 import { createCaseEventsService } from './case-events.service.ts'
 import { createCaseWriter } from './case-writer.ts'
 import { readLastLooksOfCases } from './last-looks.reads.ts'
+import { createClearanceService } from './clearance.service.ts'
+import { clearanceRoutes } from './clearance.routes.ts'
 import { createCasesService } from './cases.service.ts'
 import { NoticeActRow, NoticeDeliveryRow, NoticeRow } from './notice.entity.ts'
 import {
@@ -24,6 +28,7 @@ import { createNoticesService } from './notices.service.ts'
 import { createObservationQueries } from './observations.queries.ts'
 import { observationRoutes } from './observations.routes.ts'
 import { createObservationsService } from './observations.service.ts'
+import { answerForClearance, clearancePrintKind, createClearancePrinter } from './print-clearance.ts'
 import { createProtocolsService } from './protocols.service.ts'
 import { createQuarantineQueries } from './quarantine.queries.ts'
 import { quarantineRoutes } from './quarantine.routes.ts'
@@ -56,6 +61,8 @@ export function createQuarantine(
     animals: Animals
     water: Water
     enclosures: Enclosures
+    documents: Documents
+    pdf: PdfPool
     mail: Mail
     publicUrl: string
   },
@@ -69,8 +76,12 @@ export function createQuarantine(
   const observations = createObservationsService({ ...parts, writer, notices })
   const queries = createQuarantineQueries(parts)
   const observationQueries = createObservationQueries(parts)
+  const clearance = createClearanceService({ ...parts, writer })
+  const { service: documents, prints } = given.documents
+  const print = createClearancePrinter({ ...parts, documents, queries })
+  prints.answerFor(clearancePrintKind, answerForClearance(queries))
   return {
-    services: { cases, events, protocols, observations, notices },
+    services: { cases, events, protocols, observations, notices, clearance },
     queries,
     /** Observations, rounds and urgent calls, for screens and the worklist. */
     observationQueries,
@@ -78,6 +89,7 @@ export function createQuarantine(
     lastLooks: (since: Date) => readLastLooksOfCases(parts.dataSource, since),
     routes: [
       ...quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
+      ...clearanceRoutes({ clearance, queries, print, clock: parts.clock }),
       ...observationRoutes({ observations, notices, queries: observationQueries }),
     ],
     /** Work that runs beside the requests. */

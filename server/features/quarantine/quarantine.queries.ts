@@ -17,15 +17,15 @@ import { findCaseId, readLooks, readStepRecords } from './case-facts.reads.ts'
 import type { CaseReadRow } from './case-facts.reads.ts'
 import { presentCase } from './case-detail.present.ts'
 import type { CaseWork } from './case-steps.ts'
-import { presentCaseRow, presentNames } from './cases.present.ts'
+import { clockOf, presentCaseRow, presentNames } from './cases.present.ts'
 import type { Estimates } from './cases.present.ts'
 import { isInView, sortBoard, tallyOf } from './board-views.ts'
-import { clearedContentOf } from './clearance-content.ts'
 import { protocolInForce } from './protocol-in-force.ts'
 import { presentProtocol } from './protocols.present.ts'
 import { readProtocolVersions } from './protocols.reads.ts'
-import { readClocks } from './read-clocks.ts'
+import { isLive, readClocks } from './read-clocks.ts'
 import type { ClockFacts, WantedCases } from './read-clocks.ts'
+import { readSignedEvent } from './read-signed-event.ts'
 
 type Board = ReplyOf<typeof contracts.listCases>
 export type BoardQuery = QueryOf<typeof contracts.listCases>
@@ -109,9 +109,10 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const signatures = new Map()
       let cleared = null
       for (const event of own) {
-        const sealed = await parts.signing.readSealed(event.signed_text_id ?? '')
-        signatures.set(event.signed_text_id, sealed.block)
-        if (event.kind === 'cleared') cleared = clearedContentOf(sealed.content)
+        const { block, clearance } = await readSignedEvent(parts.signing, head, event)
+        signatures.set(event.signed_text_id, block)
+        if (event.kind === 'cleared')
+          cleared = { against: clearance?.unmet.length ?? 0, reason: clearance?.reason ?? null }
       }
       const batch = facts.batches.filter((row) => row.case_id === id).map((row) => row.animal_id)
       const protocol = protocolInForce(facts, head)
@@ -125,6 +126,18 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
         cleared,
         roles,
       })
+    },
+
+    /** The signed clearance of a case, checked now, with where the case stands; null when it was not cleared. */
+    async sealedClearance(number: string) {
+      const id = await findCaseId(db, number)
+      if (id === null) throw new Problem('not-found')
+      const facts = await clocksOf([id], clock.now())
+      const head = facts.cases.find((one) => one.id === id)
+      const event = facts.events.find((row) => row.case_id === id && row.kind === 'cleared' && isLive(row))
+      if (!head || !event) return null
+      const { block, clearance } = await readSignedEvent(parts.signing, head, event)
+      return { caseId: id, block, clearance, status: clockOf(facts, head).status }
     },
 
     async protocols(): Promise<ProtocolVersion[]> {

@@ -1,0 +1,33 @@
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import type { SignatureEntry } from '../../../shared/domain/documents/pdf-document-model.ts'
+import { documentWords } from '../../../shared/messages/documents.ts'
+import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+
+const checkWords = {
+  intact: () => documentWords.recordIntact,
+  broken: () => documentWords.recordBroken,
+  'unknown-key': () => documentWords.recordUnknownKey,
+}
+
+/** The signature and licence block as paper shows it, with the outcome of the check made now. */
+export function signatureEntry(block: SignatureBlock): SignatureEntry {
+  const { licence } = block
+  return {
+    name: block.printedName,
+    role: documentWords.signerRole,
+    licence: documentWords.licence({ number: licence.number, until: sayDate(licence.validUntil) }),
+    jurisdiction: licence.jurisdiction,
+    meaning: documentWords.signedAs({ meaning: block.meaning }),
+    signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
+    check: block.state === 'intact' ? 'intact' : 'broken',
+    checkWords: checkWords[block.state](),
+  }
+}
+
+/** The line for each page that says who signed and when. */
+export function signerLine(block: SignatureBlock): string {
+  return documentWords.signedBy({
+    name: block.printedName,
+    at: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
+  })
+}

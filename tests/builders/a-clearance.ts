@@ -1,0 +1,44 @@
+import { newKey, password } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
+import { aCase } from './a-case.ts'
+import type { BuiltCase } from './a-case.ts'
+
+/** A case whose days have run and whose two samples were negative: nothing stands between it and clearance. */
+export async function aClearableCase(
+  api: TestApi,
+  given: Parameters<typeof aCase>[1] = {},
+): Promise<BuiltCase> {
+  const one = await aCase(api, { at: '2026-10-25T14:00:00Z', ...given })
+  await negative(api, one, '2026-11-08')
+  await negative(api, one, '2026-11-22')
+  return one
+}
+
+/** A negative wet mount of a sample taken on a day, reported the next. */
+export async function negative(api: TestApi, one: BuiltCase, takenOn: string): Promise<void> {
+  const { agent } = await api.as('technician')
+  const taken = new Date(`${takenOn}T14:00:00Z`)
+  await agent
+    .post(`${one.url}/results`)
+    .send({
+      id: api.nextId(),
+      takenAt: taken.toISOString(),
+      happenedAt: new Date(taken.getTime() + 86_400_000).toISOString(),
+      testKey: 'wet-mount',
+      result: 'negative',
+    })
+    .expect(201)
+}
+
+/** Signs the clearance of a case as a person; nothing unmet was seen unless told. */
+export function clear(
+  person: TestPerson,
+  one: Pick<BuiltCase, 'url'>,
+  change: Record<string, unknown> = {},
+  key = newKey(),
+) {
+  return person.agent
+    .post(`${one.url}/clearance`)
+    .set('Idempotency-Key', key)
+    .send({ password, expectedUnmet: [], ...change })
+}
