@@ -101,6 +101,7 @@ export function compose(outside: Outside) {
     water,
     animals,
     documents,
+    treatments: quarantine.services.treatments,
   })
   const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
   const today = createToday({

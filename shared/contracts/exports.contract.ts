@@ -171,7 +171,7 @@ export const exportHistory = contract({
     ...Period,
   }),
   reply: { 201: ExportRow },
-  problems: ['not-found', 'period-reversed', 'id-already-used'],
+  problems: ['not-found', 'period-reversed', 'id-already-used', 'print-busy', 'print-failed'],
   idempotent: 'by-record-id',
 })
 

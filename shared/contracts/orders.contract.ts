@@ -385,6 +385,6 @@ export const printOrder = contract({
     version: z.coerce.number().int().min(1).optional().describe('Version; the newest unless told'),
   }),
   reply: { 200: z.string().describe('PDF') },
-  problems: ['not-found'],
+  problems: ['not-found', 'broken-record', 'print-busy', 'print-failed'],
   produces: 'pdf',
 })

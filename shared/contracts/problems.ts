@@ -85,6 +85,8 @@ export const problemStatus = {
   'not-clearable': 409,
   'reason-needed': 422,
   'form-too-old': 409,
+  'print-busy': 503,
+  'print-failed': 500,
   'outside-working-order': 500,
 } as const satisfies Record<string, number>
 

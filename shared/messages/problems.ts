@@ -37,6 +37,8 @@ export const problemTitles = defineMessages({
   'dose-not-possible': 'This dose cannot be given now',
   'first-calculation-missing': 'The first calculation is not there yet',
   'not-held': 'Nothing is held here',
+  'print-busy': 'Too much is being printed at once',
+  'print-failed': 'This cannot be printed as it stands',
   'outside-working-order': 'Something failed on our side',
   'unknown-route': 'There is nothing at this address',
   'already-confirmed': 'This was already confirmed',

@@ -2,6 +2,7 @@ import type { Db } from '../../platform/database/db.ts'
 
 export interface DoseReadRow {
   id: string
+  order_id: string
   dose_key: string
   kind: 'given' | 'recorded' | 'withheld' | 'refused'
   amount_entered_value: string | null
@@ -21,8 +22,13 @@ export interface DoseReadRow {
 
 /** Every record of an order's doses, over all its versions, in time order. */
 export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
+  return readDosesOf(db, [orderId])
+}
+
+/** The same of several orders at once; each row says whose it is. */
+export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseReadRow[]> {
   return db.query(
-    `SELECT d.id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note,
+    `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note,
             d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue
@@ -32,8 +38,8 @@ export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
        LEFT JOIN product_lots t ON t.id = d.lot_id
        LEFT JOIN LATERAL (SELECT * FROM bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
-      WHERE v.order_id = $1 ORDER BY d.happened_at, d.recorded_at`,
-    [orderId],
+      WHERE v.order_id = ANY($1::uuid[]) ORDER BY d.happened_at, d.recorded_at`,
+    [orderIds],
   )
 }
 

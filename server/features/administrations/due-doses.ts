@@ -5,7 +5,8 @@ import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { OrderQueries } from '../orders/index.ts'
-import { readDoses } from './administrations.reads.ts'
+import { readDosesOf } from './administrations.reads.ts'
+import type { DoseReadRow } from './administrations.reads.ts'
 
 type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
 
@@ -19,9 +20,14 @@ export async function findDueDoses(
   const now = parts.now().toISOString()
   const until = query.until ?? addHours(now, aheadHours)
   const orders = await parts.queries.open()
+  const ids = orders.map(({ row }) => row.id)
+  const all = ids.length > 0 ? await readDosesOf(parts.dataSource, ids) : []
+  const byOrder = new Map<string, DoseReadRow[]>()
+  for (const record of all)
+    byOrder.set(record.order_id, [...(byOrder.get(record.order_id) ?? []), record])
   const found: DueDose[] = []
   for (const { row, plan } of orders) {
-    const records = await readDoses(parts.dataSource, row.id)
+    const records = byOrder.get(row.id) ?? []
     for (const dose of plannedDoses(plan, plan.zone)) {
       const mine = records.filter((record) => record.dose_key === dose.key)
       const running = mine.some(

@@ -3,7 +3,7 @@ import type { ExportFormat } from '../../../shared/domain/register/export-format
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { csvStream } from '../../platform/csv/csv-stream.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
-import { spellUndrawable } from '../../platform/pdf/typeface.ts'
+import { drawable } from '../../platform/pdf/drawable.ts'
 import { historyCsv } from './history-csv.ts'
 import { historyDarwinCore } from './history-darwin-core.ts'
 import { historyDocument } from './history-document.ts'
@@ -14,14 +14,6 @@ export interface MadeFile {
   content: Uint8Array
   mediaType: string
   fileName: string
-}
-
-/** What people wrote in a script that the print's typeface lacks is spelled out: a history must always come out. */
-function drawable<T>(value: T): T {
-  if (typeof value === 'string') return spellUndrawable(value) as T
-  if (Array.isArray(value)) return value.map(drawable) as T
-  if (value === null || typeof value !== 'object') return value
-  return Object.fromEntries(Object.entries(value).map(([key, each]) => [key, drawable(each)])) as T
 }
 
 const csvType = 'text/csv; charset=utf-8'

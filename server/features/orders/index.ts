@@ -9,6 +9,7 @@ import type { Documents } from '../documents/index.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { Formulary } from '../formulary/index.ts'
+import type { TreatmentsService } from '../quarantine/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { Water } from '../water/index.ts'
 import { createBathFactsReader } from './bath-facts.ts'
@@ -21,10 +22,12 @@ import {
 } from './order.entity.ts'
 import { readOrderWork } from './order-work.ts'
 import { readSituation } from './order-situation.ts'
+import { createCourseReporter } from './report-course.ts'
 import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
 import { createOrdersService } from './orders.service.ts'
-import { createOrderPrinter } from './print-order.ts'
+import { createOrderPrinter, orderPrintKind } from './print-order.ts'
+import { answerForOrderPrints } from './print-state.ts'
 
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
@@ -41,10 +44,11 @@ export interface OrdersOutside extends Parts {
   animals: Animals
   documents: Documents
   pdf: PdfPool
+  treatments: TreatmentsService
 }
 
 export function createOrders(parts: OrdersOutside) {
-  const { dataSource, clock, facility, signing, formulary } = parts
+  const { dataSource, clock, facility, signing, formulary, documents } = parts
   const now = () => clock.now()
   const facts = createBathFactsReader({
     dataSource,
@@ -57,13 +61,16 @@ export function createOrders(parts: OrdersOutside) {
     product: (id: string) => formulary.queries.product(id),
     doseLine: (id: string) => formulary.queries.doseLine(id),
   }
+  const course = createCourseReporter(parts)
   const service = createOrdersService({
     ...parts,
+    course,
     ...situation,
     enclosureName: async (id) => (await placeReads.readEnclosure(dataSource, { id }))?.name ?? '',
   })
   const queries = createOrderQueries({ dataSource, signing, now })
-  const print = createOrderPrinter({ ...parts, documents: parts.documents.service, queries })
+  const print = createOrderPrinter({ ...parts, documents: documents.service, queries })
+  documents.prints.answerFor(orderPrintKind, answerForOrderPrints(queries))
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
   const judge = (
     fields: BathOrderFields,
@@ -79,6 +86,7 @@ export function createOrders(parts: OrdersOutside) {
     queries,
     judge,
     print,
+    course,
     /** Orders with something to decide, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString()),
     routes: orderRoutes({ service, queries, situation, now, print }),

@@ -18,6 +18,7 @@ import type { Override } from './order-content.ts'
 import type { OrderEventRow, OrderHead } from './order.entity.ts'
 import { missingFields, missingProblem, readSituation } from './order-situation.ts'
 import type { OrderSituation, SituationParts } from './order-situation.ts'
+import type { CourseReporter } from './report-course.ts'
 import * as repository from './orders.repository.ts'
 
 export interface OrdersParts extends SituationParts {
@@ -27,6 +28,7 @@ export interface OrdersParts extends SituationParts {
   facility: FacilityService
   signing: SigningService
   enclosureName(id: string): Promise<string>
+  course: CourseReporter
 }
 
 export interface SignRequest {
@@ -323,6 +325,7 @@ export function createOrdersService(parts: OrdersParts) {
         const order = await lock(tx, number)
         await refuseEnded(tx, order)
         await noteEvent(tx, order, 'discontinued', { id: parts.ids.next(), happenedAt: tx.at, reason })
+        await parts.course.settle(tx, order.id)
       })
     },
   }

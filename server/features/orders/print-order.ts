@@ -2,6 +2,7 @@ import type { Clock } from '../../platform/clock.ts'
 import type { Transactions } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import { drawable } from '../../platform/pdf/drawable.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { DocumentsService } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -28,7 +29,7 @@ export function createOrderPrinter(parts: PrintParts) {
         detail: 'The signed text of this order cannot be read any more. Tell the administrator; do not dose.',
       })
     const model = orderDocument({
-      content: sealed.content,
+      content: drawable(sealed.content),
       block: sealed.block,
       row: sealed.row,
       superseded: sealed.superseded,

@@ -32,7 +32,9 @@ import { answerForClearance, clearancePrintKind, createClearancePrinter } from '
 import { createProtocolsService } from './protocols.service.ts'
 import { createQuarantineQueries } from './quarantine.queries.ts'
 import { quarantineRoutes } from './quarantine.routes.ts'
+import { createTreatmentsService } from './treatments.service.ts'
 
+export type { TreatmentsService } from './treatments.service.ts'
 export type { CaseEventFacts } from './case-event-facts.ts'
 
 export const quarantineEntities = [
@@ -71,6 +73,7 @@ export function createQuarantine(
   const writer = createCaseWriter(parts)
   const cases = createCasesService({ ...parts, writer })
   const events = createCaseEventsService({ ...parts, writer })
+  const treatments = createTreatmentsService({ ...parts, events })
   const protocols = createProtocolsService(parts)
   const notices = createNoticesService(parts)
   const observations = createObservationsService({ ...parts, writer, notices })
@@ -81,7 +84,7 @@ export function createQuarantine(
   const print = createClearancePrinter({ ...parts, documents, queries })
   prints.answerFor(clearancePrintKind, answerForClearance(queries))
   return {
-    services: { cases, events, protocols, observations, notices, clearance },
+    services: { cases, events, treatments, protocols, observations, notices, clearance },
     queries,
     /** Observations, rounds and urgent calls, for screens and the worklist. */
     observationQueries,

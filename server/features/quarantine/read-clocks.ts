@@ -136,6 +136,25 @@ async function readComponent(parts: ClockParts, db: Db, wanted: WantedCases, asO
   }
 }
 
+/** The cases with an animal of theirs in one of these enclosures at an instant, parts of groups included. */
+export async function findCasesIn(
+  db: Db,
+  enclosureIds: readonly string[],
+  at: Date,
+): Promise<{ id: string; number: string }[]> {
+  const cases = await reads.readCases(db)
+  const batches = withParts(await reads.readMembers(db), await reads.readSplits(db))
+  const animalIds = [...new Set(batches.map((row) => row.animal_id))]
+  const there = clip(cases, batches, await reads.readStaysOf(db, animalIds)).filter(
+    (stay) =>
+      enclosureIds.includes(stay.enclosure_id) &&
+      stay.from_at <= at &&
+      (stay.until_at === null || stay.until_at > at),
+  )
+  const ids = new Set(there.map((stay) => stay.case_id))
+  return cases.filter(({ id }) => ids.has(id)).map(({ id, number }) => ({ id, number }))
+}
+
 /** Ids of the cases that share water with one, itself among them, and of all their animals: what a write locks. */
 export async function readLockSet(parts: ClockParts, db: Db, caseId: string, asOf: Date) {
   const { cases, batches } = await readComponent(parts, db, [caseId], asOf)

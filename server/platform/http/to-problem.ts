@@ -1,9 +1,12 @@
 import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express'
 import type { z } from 'zod'
 import type { FieldProblem, ProblemBody } from '../../../shared/contracts/problems.ts'
+import { printWords } from '../../../shared/messages/print-problems.ts'
 import { problemTitles } from '../../../shared/messages/problems.ts'
 import type { Log } from '../log.ts'
 import { Problem } from './problem.ts'
+import { PdfPoolBusy } from '../pdf/pdf-pool.ts'
+import { PdfRenderError } from '../pdf/pdf-render-error.ts'
 import { requestIdOf } from './request-id.ts'
 
 /** Every issue of a failed parse as a pointer and a sentence, not only the first. */
@@ -36,6 +39,8 @@ export function problemBody(problem: Problem, req: Request): ProblemBody {
 
 function asProblem(error: unknown): Problem | null {
   if (error instanceof Problem) return error
+  if (error instanceof PdfPoolBusy) return new Problem('print-busy', { detail: printWords.busy })
+  if (error instanceof PdfRenderError) return new Problem('print-failed', { detail: printWords[error.code] })
   const { type, status } = error as { type?: string; status?: number }
   if (type === 'entity.parse.failed' || type === 'encoding.unsupported' || type === 'charset.unsupported')
     return new Problem('malformed-json', { detail: 'Send JSON in UTF-8.' })
@@ -52,7 +57,7 @@ export function problemEdge(log: Log): ErrorRequestHandler {
   return (error: unknown, req: Request, res: Response, next) => {
     if (res.headersSent) return next(error)
     const known = asProblem(error)
-    if (!known)
+    if (!known || known.status === 500)
       log.error({ err: error, request_id: requestIdOf(req), url: req.originalUrl }, 'unexpected failure')
     const problem =
       known ??

@@ -34,3 +34,15 @@ export const hazardAgents: readonly AgentCode[] = [
   'copper-sulfate',
   'chelated-copper',
 ]
+
+/** Agents that hide nothing that a quarantine protocol tests for: an anaesthetic has no effect on parasite or germ. */
+const notMasking: readonly AgentCode[] = ['tricaine']
+
+/**
+ * Whether a bath with an agent hides what quarantine tests look for, so that a window has to pass after its end.
+ *
+ * @source quarantine reference K14 with the treatments reference's list of masking codes: project default (P)
+ */
+export function masksTests(agent: AgentCode): boolean {
+  return !notMasking.includes(agent)
+}

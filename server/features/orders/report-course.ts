@@ -1,0 +1,65 @@
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
+import { addMinutes } from '../../../shared/domain/time/instant-arithmetic.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
+import type { Zone } from '../../../shared/domain/time/instant.ts'
+import type { Tx } from '../../platform/database/transactions.ts'
+import type { FacilityService } from '../facility/index.ts'
+import type { TreatmentsService } from '../quarantine/index.ts'
+import { readCourse } from './course.reads.ts'
+import type { CourseReadRow } from './course.reads.ts'
+
+/** Whether nothing more is to be given, and everything given is over. */
+function courseEndedAt({ given, discontinued, done_keys, doses }: CourseReadRow): Date | null {
+  const allDone = Array.from({ length: doses }, (_, i) => String(i + 1)).every((key) => done_keys.includes(key))
+  if (given.length === 0 || !(allDone || discontinued)) return null
+  const ends = given.map(({ ended }) => ended)
+  if (ends.includes(null)) return null
+  return new Date(Math.max(...ends.map((end) => Date.parse(end ?? ''))))
+}
+
+function plannedEndOn(course: CourseReadRow, zone: Zone) {
+  const last = plannedDoses(
+    {
+      startsAt: course.starts_at.toISOString(),
+      doses: course.doses,
+      intervalHours: course.interval_hours,
+    },
+    zone,
+  ).at(-1)
+  return last ? facilityDateOf(addMinutes(last.dueAt, course.contact_minutes ?? 0), zone) : null
+}
+
+/**
+ * Tells the quarantine clocks of a course of treatment: that it began with a dose, and that it ended. A timed bath ends
+ * with its stop; an agent left in the water ends when somebody records that it is out (quarantine rule K14: the window
+ * starts when the agent is removed).
+ */
+export function createCourseReporter(parts: { facility: FacilityService; treatments: TreatmentsService }) {
+  async function settle(tx: Tx, orderId: string): Promise<void> {
+    const course = await readCourse(tx.manager, orderId)
+    const endedAt = course && courseEndedAt(course)
+    if (endedAt) await parts.treatments.ended(tx, { courseId: orderId, at: endedAt })
+  }
+  return {
+    /** After anything that may have been the last of a course: a record of any kind, a stop, a discontinuation. */
+    settle,
+
+    /** After a dose that went in. */
+    async doseWentIn(
+      tx: Tx,
+      given: { orderId: string; enclosureIds: readonly string[]; at: Date },
+    ): Promise<void> {
+      const course = await readCourse(tx.manager, given.orderId)
+      if (!course) return
+      await parts.treatments.begun(tx, {
+        courseId: given.orderId,
+        agent: course.agent,
+        enclosureIds: given.enclosureIds,
+        at: given.at,
+        plannedEndOn: plannedEndOn(course, await parts.facility.zone(tx)),
+      })
+    },
+  }
+}
+
+export type CourseReporter = ReturnType<typeof createCourseReporter>
