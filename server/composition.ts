@@ -116,6 +116,11 @@ export function compose(outside: Outside) {
     acquisitions,
     orders,
     administrations,
+  const administrations = createAdministrations({
+    ...parts,
+    facility: facility.service,
+    orders,
+    documents,
   })
   return {
     parts,

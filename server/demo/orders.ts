@@ -6,6 +6,8 @@ import { demoPassword } from './people.ts'
 import type { DemoOutside } from './water.ts'
 
 const hourMs = 3_600_000
+/** After this the agent that was left in the water is taken out. */
+const leftInWaterMinutes = 3 * 24 * 60
 
 /** What happens to an order of the practice scenario after it was written. */
 type Fate = 'draft' | 'proposal' | 'signed' | 'held' | 'discontinued' | 'first-given' | 'all-given'
@@ -231,14 +233,14 @@ export async function seedOrders(
       lotId,
       note: 'Given as ordered, quiet throughout',
     })
-    const minutes = order.fields.contactMinutes
-    if (!minutes) return
+    const minutes = order.fields.contactMinutes ?? leftInWaterMinutes
     const endedAt = new Date(startedAt.getTime() + minutes * 60_000)
     clock.set(endedAt)
     await administrations.service.stopBath(as('tech2'), doseId, {
       id: parts.ids.next(),
       cause: 'time-up',
       happenedAt: endedAt.toISOString(),
+      ...(order.fields.contactMinutes ? {} : { rescue: 'Carbon back on and half of the water changed' }),
     })
   }
 }

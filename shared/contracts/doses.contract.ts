@@ -1,7 +1,8 @@
 import { z } from 'zod'
+import { doseStates } from '../domain/orders/dose-states.ts'
 import { contract } from './contract.ts'
 import { OrderNumber } from './orders.contract.ts'
-import { EnteredQuantity, Instant, May, RecordId } from './primitives.ts'
+import { EnteredQuantity, Instant, LocalDate, May, RecordId } from './primitives.ts'
 
 const DoseKey = z
   .string()
@@ -22,7 +23,19 @@ const Calculation = z.object({
   by: z.string().describe('Who worked it out'),
   at: Instant,
   lotNumber: z.string().nullable().describe('Lot it was worked out for'),
-  amountText: z.string().nullable().describe('The amount; withheld until the second calculation is stored'),
+  amountText: z
+    .string()
+    .nullable()
+    .describe('The amount; withheld from the second person until the two calculations agree'),
+  mine: z.boolean().describe('Made by the person who asks'),
+})
+
+const PlannedDose = z.object({
+  key: DoseKey,
+  dueAt: Instant.describe('When it is planned'),
+  opensAt: Instant.describe('Beginning of its window'),
+  latestAt: Instant.describe('End of its window'),
+  state: z.enum(doseStates).describe('Where it stands'),
 })
 
 export const RecordedDose = z.object({
@@ -55,20 +68,35 @@ export type RecordedDose = z.infer<typeof RecordedDose>
 /** One planned dose as the person at the tank needs it, judged now. */
 export const BathSheet = z.object({
   number: OrderNumber,
+  versionNo: z.int().describe('Signed version in force'),
   key: DoseKey,
+  now: Instant.describe('The server’s own time: a bath is timed by it'),
   dueAt: Instant.describe('When it is planned'),
   doses: z.int().describe('Doses planned in all'),
+  calendar: z.array(PlannedDose).describe('Every planned dose of the order'),
+  standing: z
+    .object({
+      kind: z.enum(['held', 'discontinued', 'expired', 'completed']).describe('What stands in the way'),
+      by: z.string().nullable().describe('Who held or ended it'),
+      at: Instant.nullable().describe('When'),
+      reason: z.string().nullable().describe('Why, where somebody said so'),
+    })
+    .nullable()
+    .describe('Held, or ended; null while doses may be given'),
   state: z.enum(['due', 'running', 'done', 'held', 'ended', 'broken']).describe('Where this dose stands'),
   enclosureCode: z.string().describe('Enclosure whose water is treated'),
   enclosureName: z.string().describe('Its name'),
   drug: z.string().describe('Established name of the drug'),
   productName: z.string().describe('Product'),
+  form: z.enum(['liquid', 'powder', 'crystals']).nullable().describe('Form of the product'),
+  treated: z.array(z.string()).describe('The animals treated, with how many'),
   lots: z
     .array(
       z.object({
         id: RecordId,
         lotNumber: z.string().describe('Lot number'),
         state: z.string().describe('Whether it may be used'),
+        expiresOn: LocalDate.describe('Last day of use'),
       }),
     )
     .describe('Lots of the product'),
@@ -97,8 +125,14 @@ export const BathSheet = z.object({
       z.object({
         ruleId: z.string().describe('Rule'),
         text: z.string().describe('What has to be true before the first gram'),
+        level: z.enum(['stop', 'warning', 'note']).describe('How grave it is while it is not met'),
         state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands now'),
-        help: z.string().nullable().describe('What to do about it'),
+        help: z.string().nullable().describe('What was found'),
+        resolve: z.array(z.string()).describe('What would resolve it'),
+        place: z
+          .enum(['readings', 'volume', 'water', 'second-calculation'])
+          .nullable()
+          .describe('Where in the application it is resolved; null where it is done at the tank'),
       }),
     )
     .describe('Conditions, judged now'),
@@ -106,7 +140,13 @@ export const BathSheet = z.object({
   first: Calculation.nullable().describe('First calculation for this dose'),
   second: Calculation.extend({
     agrees: z.boolean().describe('Agrees with the first'),
-    differencePercent: z.number().nullable().describe('Difference from the first, percent'),
+    differs: z
+      .array(z.enum(['enclosure', 'lot', 'strength', 'amount']))
+      .describe('What does not agree with the first calculation, the order or the label'),
+    differencePercent: z
+      .number()
+      .nullable()
+      .describe('Difference from the first, percent; withheld from the second person until they agree'),
   })
     .nullable()
     .describe('Newest second calculation for this dose'),
@@ -129,6 +169,38 @@ export const getBathSheet = contract({
   problems: ['not-found'],
 })
 
+export const getDoseCalendar = contract({
+  id: 'getDoseCalendar',
+  method: 'get',
+  path: '/orders/:number/doses',
+  action: 'order.read',
+  summary: 'Every planned dose of a signed order, and where each stands',
+  params: z.strictObject({ number: OrderNumber }),
+  reply: {
+    200: z.object({
+      number: OrderNumber,
+      now: Instant.describe('The server’s own time'),
+      enclosureCode: z.string().describe('Enclosure whose water is treated'),
+      enclosureName: z.string().describe('Its name'),
+      drug: z.string().describe('Established name of the drug'),
+      doses: z.array(PlannedDose).describe('Planned doses, in time order'),
+    }),
+  },
+  problems: ['not-found'],
+})
+
+export const printBathSheet = contract({
+  id: 'printBathSheet',
+  method: 'get',
+  path: '/orders/:number/doses/:key/print',
+  action: 'order.print',
+  summary: 'The bath sheet of one dose as PDF: judged now, with lines for the pen',
+  params: doseParams,
+  reply: { 200: z.string().describe('PDF') },
+  problems: ['not-found', 'broken-record', 'print-busy', 'print-failed'],
+  produces: 'pdf',
+})
+
 export const calculateFirst = contract({
   id: 'calculateFirst',
   method: 'post',
@@ -138,7 +210,7 @@ export const calculateFirst = contract({
   params: doseParams,
   body: z.strictObject({ id: RecordId, lotId: RecordId.describe('Lot in the hand') }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'dose-not-possible'],
+  problems: ['not-found', 'may-not', 'id-already-used', 'dose-not-possible', 'working-disagrees'],
   idempotent: 'by-record-id',
 })
 
@@ -176,7 +248,7 @@ export const giveDose = contract({
     note: z.string().trim().max(1000).optional().describe('In words'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'dose-not-possible', 'broken-record'],
+  problems: ['not-found', 'may-not', 'id-already-used', 'dose-not-possible', 'broken-record'],
   idempotent: 'by-record-id',
 })
 

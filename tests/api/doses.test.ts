@@ -1,4 +1,5 @@
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest'
+import { aTankAndSumpSheet } from '../builders/a-water.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
   aBathWater,
@@ -9,7 +10,7 @@ import {
   readingsNow,
   signDraft,
 } from '../builders/an-order.ts'
-import { startApi, testDay } from '../support/api.ts'
+import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 
 let api: TestApi
@@ -125,13 +126,26 @@ describe('a dose', () => {
       .post(at(number, '/second-calculation'))
       .send(secondBody({ amount: { value: '2180', unit: 'mL' } }))
       .expect(201)
-    expect(wrong.body.second).toMatchObject({ agrees: false })
+    expect(wrong.body.second).toMatchObject({
+      agrees: false,
+      differs: ['amount'],
+      amountText: '2,180\u00a0mL',
+    })
+    // still blind: both begin again from the label
+    expect(wrong.body.blind).toBe(true)
+    expect(wrong.body.second.differencePercent).toBeNull()
+    expect(JSON.stringify(wrong.body).replaceAll('2,180', '')).not.toMatch(/218/)
     expect(wrong.body.mayStart).toBe(false)
     const elsewhere = await second.agent
       .post(at(number, '/second-calculation'))
       .send(secondBody({ enclosureRead: 'QT-8' }))
       .expect(201)
-    expect(elsewhere.body.second.agrees).toBe(false)
+    expect(elsewhere.body.second).toMatchObject({ agrees: false, differs: ['enclosure'] })
+    const label = await second.agent
+      .post(at(number, '/second-calculation'))
+      .send(secondBody({ strengthRead: { value: '10', unit: 'percent_w_w' }, lotRead: 'PZ-0371' }))
+      .expect(201)
+    expect(label.body.second.differs).toEqual(['lot', 'strength'])
     const right = await second.agent.post(at(number, '/second-calculation')).send(secondBody()).expect(201)
     expect(right.body.second).toMatchObject({ agrees: true, amountText: '219\u00a0mL' })
     expect(right.body.first.amountText).toBe('218\u00a0mL')
@@ -163,6 +177,76 @@ describe('a dose', () => {
     expect(ended.body).toMatchObject({ state: 'done', recorded: [{ stop: { cause: 'time-up' } }] })
     const order = await tech.agent.get(`/api/orders/${number}`).expect(200)
     expect(order.body).toMatchObject({ phase: 'completed', dosesGiven: 1 })
+  })
+
+  it('is worked out and given by veterinarian and technician only; a keeper is told who may', async () => {
+    const number = await aSignedBath()
+    const keeper = await api.as('keeper')
+    const sheet = await keeper.agent.get(at(number)).expect(200)
+    expect(sheet.body.may).toEqual(['dose.record', 'dose.calculate-second', 'bath.stop', 'order.hold'])
+    const work = await keeper.agent
+      .post(at(number, '/first-calculation'))
+      .send({ id: api.nextId(), lotId: formalin.lotId })
+    expect(work.body).toMatchObject({ code: 'may-not' })
+    expect(work.body.detail).toMatch(/veterinarian.*technician/i)
+    const give = await keeper.agent
+      .post(at(number, '/give'))
+      .send({ id: api.nextId(), lotId: formalin.lotId, amount })
+    expect(give.body.code).toBe('may-not')
+  })
+
+  it('is worked out again when the volume has moved since the two calculations', async () => {
+    const pool = await aBathWater(api, 'QT-7')
+    const fish = await aSchool(api, pool.id, 7)
+    const number = await aSignedBath({
+      enclosureId: pool.id,
+      animalIds: [fish.id],
+      allowedVolumeDriftPercent: 50,
+    })
+    const tech = await api.as('technician')
+    const lot = { id: api.nextId(), lotId: formalin.lotId }
+    await tech.agent.post(at(number, '/first-calculation')).send(lot).expect(201)
+    await second.agent
+      .post(at(number, '/second-calculation'))
+      .send(secondBody({ enclosureRead: 'QT-7' }))
+      .expect(201)
+    const outdated = 'has changed since the second calculation'
+    const before = await tech.agent.get(at(number)).expect(200)
+    expect(before.body.why.join(' ')).not.toContain(outdated)
+    const id = api.nextId()
+    await tech.agent
+      .post('/api/enclosures/QT-7/volumes')
+      .send({
+        id,
+        happenedAt: '2026-12-01T18:00:00Z',
+        waterBodyIds: [pool.waterBodyId, pool.sumpId],
+        sheet: {
+          ...aTankAndSumpSheet,
+          displacement: { by: 'volume', volume: { value: '141', unit: 'L' }, errorPercent: 5 },
+        },
+      })
+      .expect(201)
+    await second.agent
+      .post(`/api/volumes/${id}/confirmation`)
+      .set('Idempotency-Key', newKey())
+      .send({})
+      .expect(200)
+    const after = await tech.agent.get(at(number)).expect(200)
+    expect(after.body.amountNow.value).not.toBe('218')
+    expect(after.body.why.join(' ')).toContain(outdated)
+  })
+
+  it('stands in the calendar of its order, by the server’s own time', async () => {
+    const number = await aSignedBath({ doses: 3, intervalHours: 24, startsAt: '2026-12-01T18:20:00Z' })
+    const registrar = await api.as('registrar')
+    const calendar = await registrar.agent.get(`/api/orders/${number}/doses`).expect(200)
+    expect(calendar.body).toMatchObject({ enclosureCode: 'QT-3', now: '2026-12-01T18:20:00.000Z' })
+    expect(calendar.body.doses.map((dose: { state: string }) => dose.state)).toEqual([
+      'due',
+      'coming',
+      'coming',
+    ])
+    await registrar.agent.get('/api/orders/TO-9999/doses').expect(404)
   })
 
   it('is stopped by a keeper at once, with what was seen', async () => {
@@ -266,6 +350,21 @@ describe('a dose', () => {
     const withheld = await record({ kind: 'withheld', amount: null, note: 'not eating' })
     expect(withheld.status).toBe(201)
     await tech.agent.get(`/api/orders/${number}/doses/2`).expect(404)
+  })
+
+  it('is found with one question to the database, however many orders there are', async () => {
+    const { dataSource } = api.composition.parts
+    const asked = vi.spyOn(dataSource, 'query')
+    const due = () => api.composition.administrations.queries.due({ until: '2027-01-01T00:00:00Z' })
+    const before = await due()
+    const questions = asked.mock.calls.length
+    await aSignedBath()
+    await aSignedBath()
+    asked.mockClear()
+    expect((await due()).length).toBe(before.length + 2)
+    expect(asked.mock.calls.length).toBe(questions)
+    expect(questions).toBe(2)
+    asked.mockRestore()
   })
 
   it('is on the worklist while it is due, late or running', async () => {

@@ -1,3 +1,4 @@
+import type { DoseRecord } from '../../../shared/domain/orders/dose-states.ts'
 import type { Db } from '../../platform/database/db.ts'
 
 export interface DoseReadRow {
@@ -19,6 +20,13 @@ export interface DoseReadRow {
   stop_seen: string | null
   stop_rescue: string | null
 }
+
+/** A record as the calendar of doses takes it. */
+export const recordOf = (row: DoseReadRow): DoseRecord => ({
+  doseKey: row.dose_key,
+  kind: row.kind,
+  endedAt: row.stop_at?.toISOString() ?? null,
+})
 
 /** Every record of an order's doses, over all its versions, in time order. */
 export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
@@ -48,6 +56,10 @@ export interface CalculationReadRow {
   part: 'first' | 'second'
   lot_id: string | null
   lot_number: string | null
+  enclosure_read: string | null
+  lot_read: string | null
+  strength_entered_value: string | null
+  strength_entered_unit: string | null
   amount_entered_value: string
   amount_entered_unit: string
   net_volume_litres: number | null
@@ -66,7 +78,7 @@ export function readCalculations(
 ): Promise<CalculationReadRow[]> {
   return db.query(
     `SELECT c.id, c.part, c.lot_id, t.lot_number, c.amount_entered_value, c.amount_entered_unit, c.net_volume_litres,
-            c.agrees, c.difference_percent, c.recorded_at, c.recorded_by, p.printed_name AS by_name
+            c.enclosure_read, c.lot_read, c.strength_entered_value, c.strength_entered_unit, c.agrees, c.difference_percent, c.recorded_at, c.recorded_by, p.printed_name AS by_name
        FROM dose_calculations c
        JOIN people p ON p.id = c.recorded_by
        LEFT JOIN product_lots t ON t.id = c.lot_id

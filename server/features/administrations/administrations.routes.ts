@@ -4,23 +4,32 @@ import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import type { SheetPrinter } from './print-sheet.ts'
 import type { AdministrationsService } from './administrations.service.ts'
 
 export interface AdministrationsQueries {
   sheet(number: string, key: string, blind: boolean, actor: Actor): Promise<BathSheet>
   sheetOfDose(doseId: string, actor: Actor): Promise<BathSheet>
+  calendar(number: string): Promise<ReplyOf<typeof contracts.getDoseCalendar>>
   due(query: QueryOf<typeof contracts.listDueDoses>): Promise<ReplyOf<typeof contracts.listDueDoses>['rows']>
 }
 
 export function administrationRoutes(
   service: AdministrationsService,
   queries: AdministrationsQueries,
+  print: SheetPrinter,
 ): Route[] {
   return [
     route(contracts.listDueDoses, async ({ query }) => ({ rows: await queries.due(query) })),
     route(contracts.getBathSheet, ({ params, query, context }) =>
       queries.sheet(params.number, params.key, query.blind === 'yes', context.actor),
     ),
+    route(contracts.getDoseCalendar, ({ params }) => queries.calendar(params.number)),
+    route(contracts.printBathSheet, async ({ params, context }) => ({
+      contentType: 'application/pdf',
+      fileName: `${params.number}-dose-${params.key}.pdf`,
+      body: await print(params.number, params.key, context.actor, context.requestId),
+    })),
     route(contracts.calculateFirst, async ({ params, body, context }) => {
       await service.calculateFirst(context, params.number, params.key, body)
       return queries.sheet(params.number, params.key, false, context.actor)

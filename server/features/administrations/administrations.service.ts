@@ -1,11 +1,12 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/doses.contract.ts'
 import { listExceptions } from '../../../shared/domain/cautions/list-exceptions.ts'
-import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
 import { parseQuantity } from '../../../shared/domain/units/parse-quantity.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import { findUnit } from '../../../shared/domain/units/find-unit.ts'
+import { permissionWords } from '../../../shared/messages/permissions.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
@@ -17,9 +18,11 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
 import * as repository from './administrations.repository.ts'
+import { compareCalculations } from './compare-calculations.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import type { DoseSituation, DoseSituationParts } from './dose-situation.ts'
-import { isAmountNow, obstacles, saidForSheet } from './present-sheet.ts'
+import { divisionOf, isAmountNow, obstacles } from './judge-dose.ts'
+import { saidForSheet } from './present-sheet.ts'
 
 export interface AdministrationsParts extends DoseSituationParts {
   transactions: Transactions
@@ -51,6 +54,27 @@ function amountEntered(entered: { value: string; unit: string }, pointer: string
   if (parsed.ok) return parsed.value.entered
   const detail = sayNumberRefusal(parsed.refusal)
   throw new Problem('bad-input', { detail, errors: [{ pointer, detail, code: parsed.refusal.code }] })
+}
+
+/** A strength as read from a container: a share of the mass, or a mass in a volume. */
+function strengthEntered(entered: { value: string; unit: string }, pointer: string): Quantity {
+  const unit = findUnit(entered.unit, {})
+  const dimension =
+    unit.ok && unitOf(unit.value).dimension === 'massConcentration' ? 'massConcentration' : 'massFraction'
+  const parsed = parseQuantity(entered, { dimension, above: 0, field: 'strengthRead' })
+  if (parsed.ok) return parsed.value.entered
+  const detail = sayNumberRefusal(parsed.refusal)
+  throw new Problem('bad-input', { detail, errors: [{ pointer, detail, code: parsed.refusal.code }] })
+}
+
+/** A bath is given by a veterinarian or technician; what an order opens to keepers is feed and topical. */
+function refuseGiver(context: RequestContext): void {
+  if (!decide('dose.give', context.actor.roles, {}).allowed)
+    throw new Problem('may-not', {
+      detail: permissionWords.whoMay({
+        roles: rolesThatMay('dose.give').filter((role) => decide('dose.give', [role], {}).allowed),
+      }),
+    })
 }
 
 export function createAdministrationsService(parts: AdministrationsParts) {
@@ -126,6 +150,13 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       },
       clinical: true,
     })
+    if (happened)
+      await parts.orders.course.doseWentIn(tx, {
+        orderId: situation.row.id,
+        enclosureIds: situation.enclosureIds,
+        at: given.happenedAt,
+      })
+    await parts.orders.course.settle(tx, situation.row.id)
   }
 
   return {
@@ -136,6 +167,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       key: string,
       given: BodyOf<typeof contracts.calculateFirst>,
     ): Promise<void> {
+      refuseGiver(context)
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(tx, number, key, tx.at, given.lotId)
         const measured = situation.judgement?.dose?.measured
@@ -181,6 +213,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       given: BodyOf<typeof contracts.calculateSecond>,
     ): Promise<void> {
       const amount = amountEntered(given.amount, '/amount')
+      const strength = strengthEntered(given.strengthRead, '/strengthRead')
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(tx, number, key, tx.at)
         const first = (await parts.calculations(situation.versionId, key, tx)).find(
@@ -192,21 +225,21 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           throw new Problem('another-person-needed', {
             detail: 'The second calculation is another person’s.',
           })
-        const division = (situation.content.fields.division as Quantity | null) ?? {
-          value: '0.01',
-          unit: 'g' as const,
-        }
         const firstAmount = {
           value: first.amount_entered_value,
           unit: first.amount_entered_unit as Quantity['unit'],
         }
-        const agreement = secondCalculationAgrees(firstAmount, amount, division)
-        const same = (a: string, b: string) => a.trim().toLowerCase() === b.trim().toLowerCase()
-        const agrees =
-          agreement.ok &&
-          agreement.value.agrees &&
-          same(given.enclosureRead, situation.content.enclosure.code) &&
-          same(given.lotRead, first.lot_number ?? '')
+        const { differs, agreement } = compareCalculations(
+          {
+            enclosureCode: situation.content.enclosure.code,
+            lotNumber: first.lot_number ?? '',
+            strength: situation.product && (situation.product.strength as Quantity),
+            amount: firstAmount,
+            division: divisionOf(situation.content),
+          },
+          { enclosureRead: given.enclosureRead, lotRead: given.lotRead, strength, amount },
+        )
+        const agrees = differs.length === 0
         const { created } = await repository.insertCalculation(tx, {
           id: given.id,
           orderVersionId: situation.versionId,
@@ -216,13 +249,13 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           markRead: given.markRead,
           lotRead: given.lotRead,
           lotId: first.lot_id,
-          strengthEnteredValue: given.strengthRead.value,
-          strengthEnteredUnit: given.strengthRead.unit,
+          strengthEnteredValue: strength.value,
+          strengthEnteredUnit: strength.unit,
           amountEnteredValue: amount.value,
           amountEnteredUnit: amount.unit,
           netVolumeLitres: null,
           agrees,
-          differencePercent: agreement.ok ? agreement.value.differencePercent : null,
+          differencePercent: agreement?.differencePercent ?? null,
           recordedAt: tx.at,
           recordedBy: personOf(tx),
         })
@@ -236,6 +269,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
               amount: { ...amount },
               enclosureRead: given.enclosureRead,
               lotRead: given.lotRead,
+              differs,
             },
             clinical: true,
           })
@@ -249,6 +283,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       key: string,
       given: BodyOf<typeof contracts.giveDose>,
     ): Promise<void> {
+      refuseGiver(context)
       const amount = amountEntered(given.amount, '/amount')
       await parts.transactions.inTransaction(context, async (tx) => {
         const earlier = await repository.findDose(tx, given.id)
@@ -313,7 +348,8 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       const happenedAt = timeNotAhead(given.happenedAt, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const dose = await repository.findDose(tx, doseId)
-        if (!dose) throw new Problem('not-found')
+        const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
+        if (!dose || !orderId) throw new Problem('not-found')
         const { created } = await repository.insertStop(tx, {
           id: given.id,
           doseId,
@@ -332,6 +368,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
             after: { cause: given.cause, seen: given.seen, rescue: given.rescue },
             clinical: true,
           })
+        await parts.orders.course.settle(tx, orderId)
       })
     },
   }

@@ -10,9 +10,10 @@ import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-or
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { known } from '../../../shared/domain/cautions/fact.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
-import type { OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
+import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
 import { readDoses } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
 
@@ -22,6 +23,12 @@ export interface DoseSituation {
   content: SignedOrder
   block: SignatureBlock
   planned: PlannedDose
+  /** Every planned dose of the version in force. */
+  plan: PlannedDose[]
+  /** Enclosures whose animals share the treated water; the order's own while the water cannot be read. */
+  enclosureIds: string[]
+  /** Holds and ends of the order, the newest first. */
+  events: EventReadRow[]
   /** Every record of the order's doses, over all versions. */
   records: DoseReadRow[]
   product: Product | null
@@ -65,6 +72,17 @@ function withSpacing(
   }
 }
 
+/** The doses that a signed version plans, by the clock of its signature. */
+export const planOf = (fields: SignedOrder['fields'], block: SignatureBlock): PlannedDose[] =>
+  plannedDoses(
+    {
+      startsAt: fields.startsAt ?? block.signedAt,
+      doses: fields.doses,
+      intervalHours: fields.intervalHours,
+    },
+    block.zone,
+  )
+
 /**
  * One planned dose of the signed version in force, worked out and judged again by the facts of an instant: now before
  * a dose, or the time of a dose that is being recorded.
@@ -79,18 +97,11 @@ export async function readDoseSituation(
   options: { lotId?: string | null; db?: Db } = {},
 ): Promise<DoseSituation> {
   const sealed = await parts.queries.sealed(number, undefined)
-  if (!sealed.content)
-    throw new Problem('not-found', { detail: 'The signed text of this order cannot be read any more.' })
+  if (!sealed.content) throw new Problem('not-found', { detail: doseWords.unreadable })
   const { content } = sealed
   const { fields } = content
-  const planned = plannedDoses(
-    {
-      startsAt: fields.startsAt ?? sealed.block.signedAt,
-      doses: fields.doses,
-      intervalHours: fields.intervalHours,
-    },
-    sealed.block.zone,
-  ).find((dose) => dose.key === key)
+  const plan = planOf(fields, sealed.block)
+  const planned = plan.find((dose) => dose.key === key)
   if (!planned) throw new Problem('not-found', { detail: 'The order plans no such dose.' })
   const db = options.db ?? parts.dataSource
   const records = await readDoses(db, sealed.row.id)
@@ -112,6 +123,9 @@ export async function readDoseSituation(
     content,
     block: sealed.block,
     planned,
+    plan,
+    enclosureIds: found?.situation.water.enclosures.map(({ id }) => id) ?? [fields.enclosureId],
+    events: await parts.queries.events(sealed.row.id),
     records,
     product: found?.product ?? null,
     judgement,

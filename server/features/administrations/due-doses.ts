@@ -1,11 +1,12 @@
 import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import type { listDueDoses } from '../../../shared/contracts/doses.contract.ts'
+import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { OrderQueries } from '../orders/index.ts'
-import { readDosesOf } from './administrations.reads.ts'
+import { readDosesOf, recordOf } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
 
 type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
@@ -23,28 +24,26 @@ export async function findDueDoses(
   const ids = orders.map(({ row }) => row.id)
   const all = ids.length > 0 ? await readDosesOf(parts.dataSource, ids) : []
   const byOrder = new Map<string, DoseReadRow[]>()
-  for (const record of all)
-    byOrder.set(record.order_id, [...(byOrder.get(record.order_id) ?? []), record])
+  for (const record of all) byOrder.set(record.order_id, [...(byOrder.get(record.order_id) ?? []), record])
   const found: DueDose[] = []
   for (const { row, plan } of orders) {
     const records = byOrder.get(row.id) ?? []
-    for (const dose of plannedDoses(plan, plan.zone)) {
-      const mine = records.filter((record) => record.dose_key === dose.key)
-      const running = mine.some(
-        (record) => record.stop_at === null && record.kind !== 'withheld' && plan.timed,
-      )
-      if ((mine.length > 0 && !running) || Date.parse(dose.dueAt) > Date.parse(until)) continue
-      const latestAt = dose.closesAt
-      const late = Date.parse(now) > Date.parse(latestAt)
+    const planned = plannedDoses(plan, plan.zone)
+    const states = listDoseStates(planned, records.map(recordOf), { timed: plan.timed, ended: false }, now)
+    for (const [i, dose] of planned.entries()) {
+      const state = states[i]
+      const isOpen = state === 'coming' || state === 'due' || state === 'late'
+      if (!(isOpen || state === 'running') || Date.parse(dose.dueAt) > Date.parse(until)) continue
       found.push({
         number: row.number,
         key: dose.key,
         dueAt: dose.dueAt,
-        latestAt,
+        latestAt: dose.closesAt,
         enclosureCode: row.enclosureCode,
         drug: row.agent ? agentNames[row.agent] : '',
         amountText: row.amountText,
-        state: running ? 'running' : row.phase === 'held' ? 'held' : late ? 'late' : 'due',
+        state:
+          state === 'running' ? 'running' : row.phase === 'held' ? 'held' : state === 'late' ? 'late' : 'due',
       })
     }
   }

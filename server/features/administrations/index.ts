@@ -1,21 +1,27 @@
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
+import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
+import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { Orders } from '../orders/index.ts'
-import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
+import { readCalculations, readDoses, readOrderNumberOfDose } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
 import { BathStopRow, DoseCalculation, DoseRow } from './dose.entity.ts'
-import { readDoseSituation } from './dose-situation.ts'
+import { planOf, readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
-import { presentSheet } from './present-sheet.ts'
+import { presentCalendar, presentSheet } from './present-sheet.ts'
+import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow]
 
-export function createAdministrations(parts: Parts & { facility: FacilityService; orders: Orders }) {
+export function createAdministrations(
+  parts: Parts & { facility: FacilityService; orders: Orders; documents: Documents; pdf: PdfPool },
+) {
   const { dataSource, orders, clock } = parts
   const outside = { dataSource, orders, queries: orders.queries }
   const service = createAdministrationsService({
@@ -23,25 +29,50 @@ export function createAdministrations(parts: Parts & { facility: FacilityService
     ...outside,
     calculations: (versionId, key, tx) => readCalculations(tx.manager, versionId, key),
   })
+  const now = () => clock.now()
+  /** A dose as it stands, worked out for the lot in the hand once there is a first calculation. */
+  async function read(number: string, key: string) {
+    const situation = await readDoseSituation(outside, number, key, now())
+    const calculations = await readCalculations(dataSource, situation.versionId, key)
+    const lotId = calculations.find((one) => one.part === 'first')?.lot_id ?? null
+    if (lotId === null || lotId === situation.content.fields.lotId) return { situation, calculations }
+    return { situation: await readDoseSituation(outside, number, key, now(), { lotId }), calculations }
+  }
+  const print = createSheetPrinter({ ...parts, documents: parts.documents.service, read })
+  parts.documents.prints.answerFor(sheetPrintKind, orders.answerForPrint)
   const queries: AdministrationsQueries = {
     async sheet(number, key, blind, actor) {
-      const situation = await readDoseSituation(outside, number, key, clock.now())
-      const calculations = await readCalculations(dataSource, situation.versionId, key)
-      return presentSheet(situation, calculations, blind, actor)
+      return presentSheet({ ...(await read(number, key)), blind, actor, now: now().toISOString() })
     },
     async sheetOfDose(doseId, actor) {
       const found = await readOrderNumberOfDose(dataSource, doseId)
       if (!found) throw new Problem('not-found')
       return queries.sheet(found.number, found.key, false, actor)
     },
-    due: (query) => findDueDoses({ dataSource, queries: orders.queries, now: () => clock.now() }, query),
+    async calendar(number) {
+      const { content, row, block } = await orders.queries.sealed(number, undefined)
+      if (!content) throw new Problem('not-found', { detail: doseWords.unreadable })
+      const { fields, enclosure, product } = content
+      const plan = planOf(fields, block)
+      const course = { timed: fields.timing === 'timed', ended: row.phase === 'discontinued' }
+      const at = now().toISOString()
+      return {
+        number,
+        now: at,
+        enclosureCode: enclosure.code,
+        enclosureName: enclosure.name,
+        drug: product.establishedName,
+        doses: presentCalendar(plan, await readDoses(dataSource, row.id), course, at),
+      }
+    },
+    due: (query) => findDueDoses({ dataSource, queries: orders.queries, now }, query),
   }
   /** What the worklist asks besides the doses that are due. */
   const work = {
     recentDoses: (since: Date) => readRecentDoses(dataSource, since),
     wantedSeconds: (since: Date) => readWantedSeconds(dataSource, since),
   }
-  return { service, queries, work, routes: administrationRoutes(service, queries) }
+  return { service, queries, work, routes: administrationRoutes(service, queries, print) }
 }
 
 export type Administrations = ReturnType<typeof createAdministrations>

@@ -1,6 +1,8 @@
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
-import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import type { ResolveCode } from '../../../shared/domain/cautions/caution-code.ts'
+import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
+import type { DoseCourse } from '../../../shared/domain/orders/dose-states.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
@@ -8,12 +10,15 @@ import { formatExpression } from '../../../shared/domain/quantities/format-expre
 import { formatWorkingValue } from '../../../shared/domain/quantities/format-working-value.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
-import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import { workingLabels } from '../../../shared/messages/working.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import type { SignedOrder } from '../orders/index.ts'
+import { recordOf } from './administrations.reads.ts'
 import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts'
+import { compareCalculations } from './compare-calculations.ts'
 import type { DoseSituation } from './dose-situation.ts'
+import { divisionOf, needsSecond, obstacles, secondStands } from './judge-dose.ts'
 
 type SheetCaution = BathSheet['cautions'][number]
 const mayBe: Action[] = ['dose.give', 'dose.record', 'dose.calculate-second', 'bath.stop', 'order.hold']
@@ -52,112 +57,217 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[]): Re
   }
 }
 
-/** Whether the newest second calculation is one for the newest first one, and agrees. */
-export function secondStands(
+const isMine = (row: CalculationReadRow, actor: Actor) => row.recorded_by === actor.personId
+
+function presentFirst(row: CalculationReadRow | undefined, hide: boolean, actor: Actor): BathSheet['first'] {
+  if (!row) return null
+  return {
+    by: row.by_name,
+    at: row.recorded_at.toISOString(),
+    lotNumber: hide ? null : row.lot_number,
+    amountText: hide ? null : textOf(row.amount_entered_value, row.amount_entered_unit),
+    mine: isMine(row, actor),
+  }
+}
+
+function presentSecond(
+  situation: DoseSituation,
   first: CalculationReadRow | undefined,
   second: CalculationReadRow | undefined,
-): boolean {
-  return first !== undefined && second?.agrees === true && second.recorded_at >= first.recorded_at
-}
-
-/** Whether an amount is the one worked out, within two percent or one step of the balance. */
-export function isAmountNow(situation: DoseSituation, amount: Quantity): boolean {
-  const now = situation.judgement?.dose?.measured
-  const division = situation.content.fields.division as Quantity | null
-  if (!now || !division) return false
-  const agreement = secondCalculationAgrees(now, amount, division)
-  return agreement.ok && agreement.value.agrees
-}
-
-/** Everything that stands in the way of giving the dose now, in words. */
-export function obstacles(situation: DoseSituation, calculations: readonly CalculationReadRow[]): string[] {
-  const { block, row, answer, judgement, drift, content, records } = situation
-  const why: string[] = []
-  if (block.state !== 'intact') why.push(doseWords.notIntact)
-  if (row.phase === 'held') why.push(doseWords.held)
-  if (row.phase === 'discontinued' || row.phase === 'expired') why.push(doseWords.ended)
-  if (records.some((record) => record.dose_key === situation.planned.key)) why.push(doseWords.alreadyRecorded)
-  if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
-  if (drift && !drift.within)
-    why.push(
-      doseWords.driftOutside({
-        percent: formatDose(Number(Math.abs(drift.percent).toFixed(1)), 'percent').text,
-        allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
-      }),
-    )
-  const overridden = new Set(content.overrides.map((override) => override.ruleId))
-  const zone = judgement?.facts.zone ?? 'UTC'
-  for (const caution of answer?.cautions ?? [])
-    if (caution.level === 'stop' && !(caution.overridable && overridden.has(caution.ruleId)))
-      why.push(sayCaution(caution, zone).title)
-  if (needsSecond(situation)) {
-    const first = calculations.find((one) => one.part === 'first')
-    const second = calculations.find((one) => one.part === 'second')
-    if (!first || !second) why.push(doseWords.secondMissing)
-    else if (second.recorded_at < first.recorded_at) why.push(doseWords.secondOutdated)
-    else if (!secondStands(first, second)) why.push(doseWords.secondDisagrees)
+  hide: boolean,
+  actor: Actor,
+): BathSheet['second'] {
+  if (!second) return null
+  const mine = isMine(second, actor)
+  return {
+    by: second.by_name,
+    at: second.recorded_at.toISOString(),
+    lotNumber: hide && !mine ? null : second.lot_read,
+    amountText: hide && !mine ? null : textOf(second.amount_entered_value, second.amount_entered_unit),
+    mine,
+    agrees: second.agrees ?? false,
+    differs: first && second.agrees === false ? differsOf(situation, first, second) : [],
+    differencePercent: hide ? null : second.difference_percent,
   }
-  return why
 }
 
-/** A rule asks for a second person, at signing or now. */
-export function needsSecond({ answer, content }: DoseSituation): boolean {
-  return (
-    content.conditions.some((condition) => condition.secondCalculation) ||
-    content.cautions.some((caution) => caution.secondCalculation) ||
-    (answer?.cautions.some((caution) =>
-      caution.effects.some((effect) => effect.kind === 'secondCalculation'),
-    ) ??
-      false)
-  )
+function differsOf(situation: DoseSituation, first: CalculationReadRow, second: CalculationReadRow) {
+  const quantity = (value: string | null, unit: string | null): Quantity => ({
+    value: value ?? '',
+    unit: (unit ?? 'g') as UnitCode,
+  })
+  const amountOf = (row: CalculationReadRow) => quantity(row.amount_entered_value, row.amount_entered_unit)
+  return compareCalculations(
+    {
+      enclosureCode: situation.content.enclosure.code,
+      lotNumber: first.lot_number ?? '',
+      strength: situation.product && (situation.product.strength as Quantity),
+      amount: amountOf(first),
+      division: divisionOf(situation.content),
+    },
+    {
+      enclosureRead: second.enclosure_read ?? '',
+      lotRead: second.lot_read ?? '',
+      strength: quantity(second.strength_entered_value, second.strength_entered_unit),
+      amount: amountOf(second),
+    },
+  ).differs
 }
 
-function stateOf(situation: DoseSituation): BathSheet['state'] {
-  const { block, row, records, content } = situation
-  const mine = records.filter((record) => record.dose_key === situation.planned.key)
-  const running = mine.some(
-    (record) =>
-      (record.kind === 'given' || record.kind === 'recorded') &&
-      record.stop_at === null &&
-      content.fields.timing === 'timed',
-  )
-  if (running) return 'running'
-  if (mine.length > 0) return 'done'
+/** Why no dose may be given from the order: held, or ended by people or by time. */
+function standingOf({ row, events }: DoseSituation): BathSheet['standing'] {
+  const { phase } = row
+  if (phase === 'expired' || phase === 'completed') return { kind: phase, by: null, at: null, reason: null }
+  if (phase !== 'held' && phase !== 'discontinued') return null
+  const event = events.find((one) => one.kind === phase)
+  return {
+    kind: phase,
+    by: event?.by_name ?? null,
+    at: event?.happened_at.toISOString() ?? null,
+    reason: event?.reason ?? null,
+  }
+}
+
+function stateOf(situation: DoseSituation, calendar: BathSheet['calendar']): BathSheet['state'] {
+  const { block, row, planned } = situation
+  const own = calendar.find((dose) => dose.key === planned.key)?.state
+  if (own === 'running') return 'running'
+  if (own === 'given' || own === 'withheld' || own === 'refused') return 'done'
   if (block.state !== 'intact') return 'broken'
   if (row.phase === 'held') return 'held'
   return row.phase === 'discontinued' || row.phase === 'expired' ? 'ended' : 'due'
 }
 
-/** The sheet of one dose. For the person who calculates a second time, every amount is left out on the server. */
-export function presentSheet(
+/** Every planned dose of an order with its state. */
+export function presentCalendar(
+  plan: DoseSituation['plan'],
+  records: readonly DoseReadRow[],
+  course: DoseCourse,
+  now: string,
+): BathSheet['calendar'] {
+  const states = listDoseStates(plan, records.map(recordOf), course, now)
+  return plan.map(({ key, dueAt, opensAt, closesAt }, i) => ({
+    key,
+    dueAt,
+    opensAt,
+    latestAt: closesAt,
+    state: states[i] ?? 'coming',
+  }))
+}
+
+function presentSteps(
   situation: DoseSituation,
   calculations: readonly CalculationReadRow[],
-  blind: boolean,
-  actor: Actor,
-): BathSheet {
+  zone: string,
+): BathSheet['steps'] {
+  const fired = new Map((situation.answer?.cautions ?? []).map((one) => [one.ruleId as string, one]))
+  const agreed = secondStands(
+    calculations.find((one) => one.part === 'first'),
+    calculations.find((one) => one.part === 'second'),
+  )
+  return situation.content.conditions.map((condition) => {
+    const caution = fired.get(condition.ruleId)
+    const { ruleId, level, text } = condition
+    if (condition.secondCalculation)
+      return {
+        ruleId,
+        level,
+        text,
+        state: agreed ? ('met' as const) : ('unmet' as const),
+        help: null,
+        resolve: [],
+        place: 'second-calculation' as const,
+      }
+    if (!caution) return { ruleId, level, text, state: 'met' as const, help: null, resolve: [], place: null }
+    const said = sayCaution(caution, zone)
+    return {
+      ruleId,
+      level,
+      text,
+      state: caution.unknownFacts.length > 0 ? ('unknown' as const) : ('unmet' as const),
+      help: said.text,
+      resolve: said.resolves,
+      place:
+        caution.resolvedBy.map((code) => placesToResolve[code]).find((place) => place !== undefined) ?? null,
+    }
+  })
+}
+
+/** Where in the application somebody resolves what a caution asks for; the rest is done at the tank or by the vet. */
+const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['place']>> = {
+  'read-oxygen': 'readings',
+  'raise-oxygen': 'readings',
+  'aerate-and-log': 'water',
+  'read-temperature': 'readings',
+  'cool-water': 'readings',
+  'read-alkalinity': 'readings',
+  'raise-alkalinity': 'readings',
+  'read-copper': 'readings',
+  'read-water': 'readings',
+  'correct-water': 'readings',
+  'part-the-water': 'water',
+  'move-animals': 'water',
+  'record-inhabitants': 'water',
+  'carbon-off': 'water',
+  'ozone-off': 'water',
+  'uv-off': 'water',
+  'fractionator-off': 'water',
+  'determine-volume': 'volume',
+  'calculate-again-by-another': 'second-calculation',
+}
+
+/** What a sheet is made from, the moment it is made for, and for whom. */
+export interface SheetRequest {
+  situation: DoseSituation
+  calculations: readonly CalculationReadRow[]
+  blind: boolean
+  actor: Actor
+  now: string
+}
+
+/**
+ * The sheet of one dose. For the person who calculates a second time, every amount is left out on the server until the
+ * two agree: after a disagreement both begin again from the label, and the second is still blind.
+ */
+export function presentSheet({ situation, calculations, blind, actor, now }: SheetRequest): BathSheet {
   const { content, judgement, answer, drift, product, planned, records } = situation
   const { fields } = content
   const zone = judgement?.facts.zone ?? 'UTC'
   const dose = judgement?.dose ?? null
   const first = calculations.find((one) => one.part === 'first')
   const second = calculations.find((one) => one.part === 'second')
-  const secondStored = first !== undefined && second !== undefined && second.recorded_at >= first.recorded_at
-  const hide = blind && !secondStored
-  const fired = new Map((answer?.cautions ?? []).map((caution) => [caution.ruleId as string, caution]))
+  const own = records.filter((record) => record.dose_key === planned.key)
+  const hide = blind && own.length === 0 && !secondStands(first, second)
+  const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
+  const calendar = presentCalendar(situation.plan, records, course, now)
   const why = obstacles(situation, calculations)
   return {
     number: content.number,
+    versionNo: content.versionNo,
     key: planned.key,
+    now,
     dueAt: planned.dueAt,
     doses: fields.doses,
-    state: stateOf(situation),
+    calendar,
+    standing: standingOf(situation),
+    state: stateOf(situation, calendar),
     enclosureCode: content.enclosure.code,
     enclosureName: content.enclosure.name,
     drug: content.product.establishedName,
     productName: content.product.productName,
-    lots: (product?.lots ?? []).map(({ id, lotNumber, state }) => ({ id, lotNumber, state })),
+    form: product?.form ?? null,
+    treated: content.water.animals
+      .filter((animal) => animal.treated)
+      .map((animal) => `${animal.countText}, ${animal.commonName}`),
+    // the second person reads the lot from the container
+    lots: (hide ? [] : (product?.lots ?? [])).map(({ id, lotNumber, state, expiresOn }) => ({
+      id,
+      lotNumber,
+      state,
+      expiresOn,
+    })),
     targetText: `${content.targetText} ${content.basisText}`,
-    contactMinutes: fields.timing === 'timed' ? fields.contactMinutes : null,
+    contactMinutes: course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,
@@ -174,40 +284,16 @@ export function presentSheet(
     driftPercent: drift?.percent ?? null,
     driftWithin: drift?.within ?? false,
     cautions: (answer?.cautions ?? []).map((caution) => saidForSheet(caution, zone)),
-    steps: content.conditions.map((condition) => {
-      const caution = fired.get(condition.ruleId)
-      const state = caution === undefined ? 'met' : caution.unknownFacts.length > 0 ? 'unknown' : 'unmet'
-      return {
-        ruleId: condition.ruleId,
-        text: condition.text,
-        state,
-        help: caution ? sayCaution(caution, zone).text : null,
-      }
-    }),
+    steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
-    first: first
-      ? {
-          by: first.by_name,
-          at: first.recorded_at.toISOString(),
-          lotNumber: first.lot_number,
-          amountText: hide ? null : textOf(first.amount_entered_value, first.amount_entered_unit),
-        }
-      : null,
-    second: second
-      ? {
-          by: second.by_name,
-          at: second.recorded_at.toISOString(),
-          lotNumber: second.lot_number,
-          amountText: hide ? null : textOf(second.amount_entered_value, second.amount_entered_unit),
-          agrees: second.agrees ?? false,
-          differencePercent: second.difference_percent,
-        }
-      : null,
+    first: presentFirst(first, hide, actor),
+    second: presentSecond(situation, first, second, hide, actor),
     mayStart: why.length === 0,
     why,
-    recorded: records
-      .filter((record) => record.dose_key === planned.key)
-      .map((record) => presentRecord(record, records)),
-    may: mayBe.filter((action) => decide(action, actor.roles).allowed),
+    recorded: own.map((record) => presentRecord(record, records)),
+    may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
 }
+
+/** What an order opens to keepers is feed and topical, so giving a bath is decided; who calculated first is not known here. */
+const factsOfBath = (action: Action) => (action === 'dose.give' ? {} : undefined)

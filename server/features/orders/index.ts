@@ -31,8 +31,10 @@ import { answerForOrderPrints } from './print-state.ts'
 
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
+export { orderNotice, signatureEntry } from './order-document.ts'
 export type { SignedOrder } from './order-content.ts'
 export type { OrderWork } from './order-work.ts'
+export type { EventReadRow } from './orders.reads.ts'
 export type { BathFactsReader } from './bath-facts.ts'
 export const orderEntities = [OrderHead, OrderVersion, OrderVersionAnimal, OrderEventRow, AgentExperience]
 
@@ -70,7 +72,8 @@ export function createOrders(parts: OrdersOutside) {
   })
   const queries = createOrderQueries({ dataSource, signing, now })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries })
-  documents.prints.answerFor(orderPrintKind, answerForOrderPrints(queries))
+  const answerForPrint = answerForOrderPrints(queries)
+  documents.prints.answerFor(orderPrintKind, answerForPrint)
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
   const judge = (
     fields: BathOrderFields,
@@ -89,6 +92,7 @@ export function createOrders(parts: OrdersOutside) {
     course,
     /** Orders with something to decide, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString()),
+    answerForPrint,
     routes: orderRoutes({ service, queries, situation, now, print }),
   }
 }

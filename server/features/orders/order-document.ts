@@ -28,10 +28,14 @@ export interface OrderPaper {
 }
 
 /** A state of the order that no page may hide; null when doses may be given from it. */
-function noticeOf({ block, row, superseded, content }: OrderPaper): string | null {
+export function orderNotice({
+  block,
+  row,
+  superseded,
+  versionNo,
+}: Pick<OrderPaper, 'block' | 'row' | 'superseded'> & { versionNo: number }): string | null {
   if (block.state !== 'intact') return block.state === 'broken' ? orderPaper.broken : orderPaper.unknownKey
-  if (superseded)
-    return documentWords.supersededNotice({ version: orderPaper.version({ n: content.versionNo + 1 }) })
+  if (superseded) return documentWords.supersededNotice({ version: orderPaper.version({ n: versionNo + 1 }) })
   if (row.phase === 'held') return documentWords.heldNotice
   if (row.phase === 'discontinued') return orderPaper.discontinued
   if (row.phase === 'expired') return orderPaper.expired
@@ -195,7 +199,8 @@ function givenBlock({ content, block }: OrderPaper): DocumentBlock {
   }
 }
 
-function signatureOf(block: SignatureBlock): SignatureEntry {
+/** The signature under an order as it is printed, with the check of its text. */
+export function signatureEntry(block: SignatureBlock): SignatureEntry {
   const words = {
     intact: documentWords.recordIntact,
     broken: documentWords.recordBroken,
@@ -218,7 +223,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const { content, block } = paper
   const signedAt = sayInstantWithOffset(block.signedAt, block.zone, 'second')
   const short = formatFingerprint(block.hash)
-  const notice = noticeOf(paper)
+  const notice = orderNotice({ ...paper, versionNo: content.versionNo })
   const usesMicrolitres = content.targetText.includes('L/L')
   const treated = content.water.animals.filter((animal) => animal.treated)
   const volume = content.water.volumeText ?? ''
@@ -274,7 +279,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       animalsBlock(paper),
       { kind: 'heading', text: orderPaper.givenHeading },
       givenBlock(paper),
-      { kind: 'signatures', entries: [signatureOf(block)] },
+      { kind: 'signatures', entries: [signatureEntry(block)] },
       { kind: 'fingerprint', label: orderPaper.fingerprint, fingerprint: block.hash },
       standingCaution(),
     ],

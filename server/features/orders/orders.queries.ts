@@ -145,6 +145,9 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       })
     },
 
+    /** Holds and ends of an order, the newest first. */
+    events: (orderId: string) => readEvents(parts.dataSource, orderId),
+
     /** One signed version, checked now, with where the order stands, for paper. */
     async sealed(number: string, versionNo: number | undefined) {
       const row = await rowOf(number)

@@ -1,5 +1,5 @@
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
-import { addMinutes } from '../../../shared/domain/time/instant-arithmetic.ts'
+import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Zone } from '../../../shared/domain/time/instant.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
@@ -10,7 +10,9 @@ import type { CourseReadRow } from './course.reads.ts'
 
 /** Whether nothing more is to be given, and everything given is over. */
 function courseEndedAt({ given, discontinued, done_keys, doses }: CourseReadRow): Date | null {
-  const allDone = Array.from({ length: doses }, (_, i) => String(i + 1)).every((key) => done_keys.includes(key))
+  const allDone = Array.from({ length: doses }, (_, i) => String(i + 1)).every((key) =>
+    done_keys.includes(key),
+  )
   if (given.length === 0 || !(allDone || discontinued)) return null
   const ends = given.map(({ ended }) => ended)
   if (ends.includes(null)) return null
@@ -26,7 +28,7 @@ function plannedEndOn(course: CourseReadRow, zone: Zone) {
     },
     zone,
   ).at(-1)
-  return last ? facilityDateOf(addMinutes(last.dueAt, course.contact_minutes ?? 0), zone) : null
+  return last ? facilityDateOf(addHours(last.dueAt, (course.contact_minutes ?? 0) / 60), zone) : null
 }
 
 /**

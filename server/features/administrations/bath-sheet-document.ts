@@ -1,0 +1,274 @@
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { bathPaper } from '../../../shared/messages/bath-paper.ts'
+import { documentWords } from '../../../shared/messages/documents.ts'
+import { basisNames } from '../../../shared/messages/formulary.ts'
+import { orderPaper } from '../../../shared/messages/orders.ts'
+import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { standingCaution } from '../../platform/pdf/standing-caution.ts'
+import { signatureEntry } from '../orders/index.ts'
+import type { SignedOrder } from '../orders/index.ts'
+
+export interface BathPaper {
+  /** As the person at the tank sees it now, with every amount. */
+  sheet: BathSheet
+  content: SignedOrder
+  block: SignatureBlock
+  /** A state of the order that no page may hide; null when doses may be given from it. */
+  notice: string | null
+  facility: string
+  paper: 'a4' | 'letter'
+  printedBy: string
+  printedAt: string
+}
+
+const percentText = (value: number) => formatDose(Number(value.toFixed(1)), 'percent').text.replace(/^-/, '−')
+
+/** What was signed beside what is worked out now; never one number. */
+function amountLimits({ sheet, content }: BathPaper): string {
+  if (sheet.signedAmountText === sheet.amountNowText && !sheet.driftPercent) return bathPaper.sameAmount
+  const signed = bathPaper.signedAmount({ amount: sheet.signedAmountText ?? '' })
+  if (sheet.driftPercent === null) return signed
+  const drift = bathPaper.drift({
+    percent: percentText(sheet.driftPercent),
+    allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
+  })
+  return `${signed} ${drift}`
+}
+
+function amountBlock(paper: BathPaper): DocumentBlock {
+  const { sheet, content, block } = paper
+  if (!sheet.amountNow) return { kind: 'paragraph', text: [{ text: bathPaper.noAmount, bold: true }] }
+  const { number, symbol } = formatDose(sheet.amountNow.value, sheet.amountNow.unit as UnitCode)
+  const { strength, strengthBasis } = content.product
+  return {
+    kind: 'amount',
+    above: bathPaper.amountAbove({ at: sayInstant(sheet.now, block.zone) }),
+    value: number,
+    unit: symbol,
+    lines: [
+      [
+        { text: sheet.drug, bold: true },
+        { text: ` (${sheet.productName}), ` },
+        {
+          text: bathPaper.strength({
+            strength: formatDose(strength.value, strength.unit as UnitCode).text,
+            basis: basisNames[strengthBasis as keyof typeof basisNames],
+          }),
+        },
+        { text: bathPaper.into, bold: true },
+      ],
+    ],
+    limits: amountLimits(paper),
+  }
+}
+
+function particulars({ sheet, block }: BathPaper): DocumentBlock {
+  const at = (instant: string) => sayInstant(instant, block.zone)
+  const own = sheet.calendar.find((dose) => dose.key === sheet.key)
+  return {
+    kind: 'grid',
+    entries: [
+      {
+        label: bathPaper.dose,
+        value: bathPaper.doseText({ key: sheet.key, doses: sheet.doses, due: at(sheet.dueAt) }),
+      },
+      ...(own
+        ? [
+            {
+              label: bathPaper.window,
+              value: bathPaper.windowText({ opens: at(own.opensAt), closes: at(own.latestAt) }),
+            },
+          ]
+        : []),
+      { label: bathPaper.target, value: sheet.targetText },
+      {
+        label: bathPaper.contact,
+        value: sheet.contactMinutes === null ? bathPaper.left : formatDose(sheet.contactMinutes, 'min').text,
+      },
+      { label: bathPaper.animals, value: sheet.treated.join('; ') },
+      ...(sheet.instructions === '' ? [] : [{ label: bathPaper.how, value: sheet.instructions }]),
+    ],
+  }
+}
+
+function conditionsBlock({ sheet }: BathPaper): DocumentBlock {
+  const states = { met: bathPaper.met, unmet: bathPaper.unmet, unknown: bathPaper.unknown }
+  return {
+    kind: 'conditions',
+    columns: 2,
+    items: sheet.steps.map((step) => [
+      { text: step.text },
+      { text: states[step.state], bold: step.state !== 'met', tone: 'second' },
+    ]),
+  }
+}
+
+const listed = (heading: string, blocks: DocumentBlock[]): DocumentBlock[] =>
+  blocks.length === 0 ? [] : [{ kind: 'heading', text: heading }, ...blocks]
+
+function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
+  const unit = sheet.amountNow?.unit ?? 'g'
+  const { first } = sheet
+  const pen = { pen: true } as const
+  const measure = { pen: true, unit: formatDose('1', unit as UnitCode).symbol } as const
+  return {
+    kind: 'table',
+    boxed: true,
+    columns: [
+      { head: '', share: 0.7 },
+      { head: bathPaper.person, share: 1.5 },
+      { head: bathPaper.enclosureRead, share: 1.1 },
+      { head: bathPaper.markRead, share: 1 },
+      { head: bathPaper.containerRead, share: 1.6 },
+      { head: bathPaper.amountRead, share: 1.2 },
+    ],
+    rows: [
+      [
+        bathPaper.first,
+        first?.by ?? pen,
+        pen,
+        pen,
+        first?.lotNumber ?? pen,
+        first ? (first.amountText ?? '') : measure,
+      ],
+      [bathPaper.second, pen, pen, pen, pen, measure],
+    ],
+    emptyText: '',
+  }
+}
+
+function duringBlock(): DocumentBlock {
+  const pen = { pen: true } as const
+  const row = [pen, { pen: true, unit: 'mg/L' } as const, { pen: true, unit: '°C' } as const, pen]
+  return {
+    kind: 'table',
+    boxed: true,
+    columns: [
+      { head: bathPaper.time, share: 0.8 },
+      { head: bathPaper.oxygen, share: 1 },
+      { head: bathPaper.temperature, share: 1 },
+      { head: bathPaper.behaviour, share: 3 },
+    ],
+    rows: [row, row, row],
+    emptyText: '',
+  }
+}
+
+/** One dose on paper for the tank: what to weigh and why, what has to be true, when to stop, and lines for the pen. */
+export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
+  const { sheet, content, block } = paper
+  const short = formatFingerprint(block.hash)
+  const notice = paper.notice ?? (sheet.why.length > 0 ? bathPaper.notReady : null)
+  const unit = formatDose('1', (sheet.amountNow?.unit ?? 'g') as UnitCode).symbol
+  const last = sheet.working.length - 1
+  return {
+    title: bathPaper.title({ number: sheet.number, dose: sheet.key }),
+    language: 'en',
+    paper: paper.paper,
+    head: {
+      facility: paper.facility,
+      name: bathPaper.name,
+      number: sheet.number,
+      version: bathPaper.version({ n: sheet.versionNo, dose: sheet.key, doses: sheet.doses }),
+      source: content.targetText.includes('L/L') ? orderPaper.sourceMicrolitres : orderPaper.source,
+      subject: { name: sheet.enclosureCode, lines: [sheet.enclosureName, ...sheet.treated.slice(0, 3)] },
+    },
+    signers: [
+      orderPaper.signedBy({
+        name: block.printedName,
+        at: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
+      }),
+    ],
+    ...(short.ok ? { recordCheck: short.value } : {}),
+    ...(notice === null ? {} : { notice }),
+    printed: {
+      by: paper.printedBy,
+      at: sayInstantWithOffset(paper.printedAt, block.zone),
+      atIso: paper.printedAt,
+      note: documentWords.laterVersion,
+    },
+    blocks: [
+      {
+        kind: 'columns',
+        divided: true,
+        columns: [
+          { share: 1, blocks: [amountBlock(paper)] },
+          { share: 1.25, blocks: [particulars(paper)] },
+        ],
+      },
+      { kind: 'rule' },
+      { kind: 'caution', level: 'stop-if', lines: [sheet.stopIf] },
+      ...listed(
+        bathPaper.inTheWay,
+        sheet.why.map((text) => ({ kind: 'paragraph', text: [{ text, bold: true }] })),
+      ),
+      ...listed(bathPaper.conditions, sheet.steps.length > 0 ? [conditionsBlock(paper)] : []),
+      ...listed(
+        bathPaper.working,
+        sheet.working.length > 0
+          ? [
+              {
+                kind: 'working',
+                lines: sheet.working.map((line, i) => ({
+                  what: line.label,
+                  formula: line.shown,
+                  result: line.result,
+                  total: i === last,
+                })),
+              },
+            ]
+          : [],
+      ),
+      ...listed(
+        bathPaper.cautions,
+        sheet.cautions.map((caution) => ({
+          kind: 'caution',
+          level: caution.level,
+          title: caution.title,
+          lines: [caution.text],
+        })),
+      ),
+      {
+        kind: 'group',
+        blocks: [
+          { kind: 'heading', text: bathPaper.calculations },
+          { kind: 'paragraph', text: bathPaper.blindNote, size: 'small' },
+          calculationsBlock(paper),
+        ],
+      },
+      {
+        kind: 'group',
+        blocks: [
+          { kind: 'heading', text: bathPaper.running },
+          {
+            kind: 'pen',
+            fields: [
+              { label: bathPaper.weighed, unit },
+              { label: bathPaper.started },
+              { label: bathPaper.endAt },
+              { label: bathPaper.ended },
+            ],
+          },
+          { kind: 'heading', text: bathPaper.during },
+          duringBlock(),
+          {
+            kind: 'pen',
+            fields: [
+              { label: bathPaper.rescue, share: 2 },
+              { label: bathPaper.givenBy },
+              { label: bathPaper.checkedBy },
+            ],
+          },
+        ],
+      },
+      { kind: 'signatures', entries: [signatureEntry(block)] },
+      { kind: 'fingerprint', label: bathPaper.fingerprint, fingerprint: block.hash },
+      standingCaution(),
+    ],
+  }
+}

@@ -1,0 +1,50 @@
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import type { Agreement } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { convert } from '../../../shared/domain/units/convert.ts'
+import { unitOf } from '../../../shared/domain/units/unit-of.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+
+export type Difference = NonNullable<BathSheet['second']>['differs'][number]
+
+export interface SecondReading {
+  enclosureRead: string
+  lotRead: string
+  strength: Quantity
+  amount: Quantity
+}
+
+export interface FirstCalculation {
+  enclosureCode: string
+  lotNumber: string
+  /** As on the label of the product in the formulary; null where it has gone. */
+  strength: Quantity | null
+  amount: Quantity
+  division: Quantity
+}
+
+const sameText = (a: string, b: string) => a.trim().toLowerCase() === b.trim().toLowerCase()
+const agreedShare = 1e-6
+
+/** The same strength, perhaps in another unit of the same kind. */
+function sameStrength(read: Quantity, label: Quantity): boolean {
+  if (unitOf(read.unit).dimension !== unitOf(label.unit).dimension) return false
+  const converted = convert(Number(read.value), read.unit, label.unit)
+  if (!converted.ok) return false
+  const wanted = Number(label.value)
+  return Math.abs(converted.value - wanted) <= agreedShare * Math.abs(wanted)
+}
+
+/** What a blind second calculation has different from the first, the order and the label. */
+export function compareCalculations(
+  first: FirstCalculation,
+  second: SecondReading,
+): { differs: Difference[]; agreement: Agreement | null } {
+  const agreement = secondCalculationAgrees(first.amount, second.amount, first.division)
+  const differs: Difference[] = []
+  if (!sameText(second.enclosureRead, first.enclosureCode)) differs.push('enclosure')
+  if (!sameText(second.lotRead, first.lotNumber)) differs.push('lot')
+  if (first.strength && !sameStrength(second.strength, first.strength)) differs.push('strength')
+  if (!agreement.ok || !agreement.value.agrees) differs.push('amount')
+  return { differs, agreement: agreement.ok ? agreement.value : null }
+}

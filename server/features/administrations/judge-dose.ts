@@ -1,0 +1,83 @@
+import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
+import { sayCaution } from '../../../shared/messages/say-caution.ts'
+import type { SignedOrder } from '../orders/index.ts'
+import type { CalculationReadRow } from './administrations.reads.ts'
+import type { DoseSituation } from './dose-situation.ts'
+
+/** Smallest step of the balance of an order; a hundredth of a gram where it names none. */
+export const divisionOf = ({ fields }: SignedOrder): Quantity =>
+  (fields.division as Quantity | null) ?? { value: '0.01', unit: 'g' }
+
+/** Whether the newest second calculation is one for the newest first one, and agrees. */
+export function secondStands(
+  first: CalculationReadRow | undefined,
+  second: CalculationReadRow | undefined,
+): boolean {
+  return first !== undefined && second?.agrees === true && second.recorded_at >= first.recorded_at
+}
+
+/** Whether an amount is the one worked out, within two percent or one step of the balance. */
+export function isAmountNow(situation: DoseSituation, amount: Quantity): boolean {
+  const now = situation.judgement?.dose?.measured
+  const division = situation.content.fields.division as Quantity | null
+  if (!now || !division) return false
+  const agreement = secondCalculationAgrees(now, amount, division)
+  return agreement.ok && agreement.value.agrees
+}
+
+/** Whether the first calculation is one for the water and the lot as they are now. */
+function firstIsOutdated({ judgement }: DoseSituation, first: CalculationReadRow): boolean {
+  const now = judgement?.dose?.measured
+  return (
+    now !== null &&
+    now !== undefined &&
+    (first.amount_entered_unit !== now.unit || Number(first.amount_entered_value) !== Number(now.value))
+  )
+}
+
+/** Everything that stands in the way of giving the dose now, in words. */
+export function obstacles(situation: DoseSituation, calculations: readonly CalculationReadRow[]): string[] {
+  const { block, row, answer, judgement, drift, content, records } = situation
+  const why: string[] = []
+  if (block.state !== 'intact') why.push(doseWords.notIntact)
+  if (row.phase === 'held') why.push(doseWords.held)
+  if (row.phase === 'discontinued' || row.phase === 'expired') why.push(doseWords.ended)
+  if (records.some((record) => record.dose_key === situation.planned.key)) why.push(doseWords.alreadyRecorded)
+  if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
+  if (drift && !drift.within)
+    why.push(
+      doseWords.driftOutside({
+        percent: formatDose(Number(Math.abs(drift.percent).toFixed(1)), 'percent').text,
+        allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
+      }),
+    )
+  const overridden = new Set(content.overrides.map((override) => override.ruleId))
+  const zone = judgement?.facts.zone ?? 'UTC'
+  for (const caution of answer?.cautions ?? [])
+    if (caution.level === 'stop' && !(caution.overridable && overridden.has(caution.ruleId)))
+      why.push(sayCaution(caution, zone).title)
+  if (needsSecond(situation)) {
+    const first = calculations.find((one) => one.part === 'first')
+    const second = calculations.find((one) => one.part === 'second')
+    if (!first || !second) why.push(doseWords.secondMissing)
+    else if (second.recorded_at < first.recorded_at || firstIsOutdated(situation, first))
+      why.push(doseWords.secondOutdated)
+    else if (!secondStands(first, second)) why.push(doseWords.secondDisagrees)
+  }
+  return why
+}
+
+/** A rule asks for a second person, at signing or now. */
+export function needsSecond({ answer, content }: DoseSituation): boolean {
+  return (
+    content.conditions.some((condition) => condition.secondCalculation) ||
+    content.cautions.some((caution) => caution.secondCalculation) ||
+    (answer?.cautions.some((caution) =>
+      caution.effects.some((effect) => effect.kind === 'secondCalculation'),
+    ) ??
+      false)
+  )
+}

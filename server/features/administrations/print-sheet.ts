@@ -1,0 +1,61 @@
+import type { Clock } from '../../platform/clock.ts'
+import type { Transactions } from '../../platform/database/transactions.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import { drawable } from '../../platform/pdf/drawable.ts'
+import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
+import type { DocumentsService } from '../documents/index.ts'
+import type { FacilityService } from '../facility/index.ts'
+import { orderNotice } from '../orders/index.ts'
+import type { CalculationReadRow } from './administrations.reads.ts'
+import { bathSheetDocument } from './bath-sheet-document.ts'
+import type { DoseSituation } from './dose-situation.ts'
+import { presentSheet } from './present-sheet.ts'
+
+export const sheetPrintKind = 'bath-sheet'
+
+export interface SheetPrintParts {
+  transactions: Transactions
+  clock: Clock
+  pdf: PdfPool
+  facility: FacilityService
+  documents: DocumentsService
+  read(number: string, key: string): Promise<{ situation: DoseSituation; calculations: CalculationReadRow[] }>
+}
+
+/** Prints the bath sheet of a dose: judged now, noted under the fingerprint of the signed order it belongs to. */
+export function createSheetPrinter(parts: SheetPrintParts) {
+  return async (number: string, key: string, actor: Actor, requestId: string): Promise<Uint8Array> => {
+    const printedAt = parts.clock.now().toISOString()
+    const { situation, calculations } = await parts.read(number, key)
+    const { block, row, content } = situation
+    const sheet = presentSheet({ situation, calculations, blind: false, actor, now: printedAt })
+    const model = bathSheetDocument({
+      sheet: drawable(sheet),
+      content: drawable(content),
+      block,
+      notice: orderNotice({ block, row, superseded: false, versionNo: content.versionNo }),
+      facility: await parts.facility.valueOf('facility.name'),
+      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      printedBy: actor.printedName,
+      printedAt,
+    })
+    const bytes = await parts.pdf.renderPdf(model)
+    await parts.transactions.inTransaction({ actor, requestId }, async (tx) => {
+      await parts.documents.registerPrint(tx, {
+        fingerprint: block.hash,
+        kind: sheetPrintKind,
+        subjectId: row.id,
+        subjectLabel: number,
+        version: String(content.versionNo),
+      })
+      tx.audit({
+        action: 'dose.print',
+        subject: { kind: 'order', id: row.id, label: number },
+        after: { key, hash: block.hash, state: block.state, inTheWay: sheet.why.length },
+      })
+    })
+    return bytes
+  }
+}
+
+export type SheetPrinter = ReturnType<typeof createSheetPrinter>
