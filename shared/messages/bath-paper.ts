@@ -35,7 +35,7 @@ export const bathPaper = defineMessages({
   cautions: 'Cautions now',
   calculations: 'Two calculations',
   blindNote:
-    'The second person fills in their line from label, mark and container, in this order, without sight of the first: fold the upper part away.',
+    'The second person gets a fresh copy of this page alone, and fills it in from label, mark and container, in this order.',
   person: 'Person',
   enclosureRead: 'Enclosure read',
   markRead: 'Mark seen',

@@ -113,7 +113,6 @@ const listed = (heading: string, blocks: DocumentBlock[]): DocumentBlock[] =>
 
 function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
   const unit = sheet.amountNow?.unit ?? 'g'
-  const { first } = sheet
   const pen = { pen: true } as const
   const measure = { pen: true, unit: formatDose('1', unit as UnitCode).symbol } as const
   return {
@@ -128,14 +127,7 @@ function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
       { head: bathPaper.amountRead, share: 1.2 },
     ],
     rows: [
-      [
-        bathPaper.first,
-        first?.by ?? pen,
-        pen,
-        pen,
-        first?.lotNumber ?? pen,
-        first ? (first.amountText ?? '') : measure,
-      ],
+      [bathPaper.first, pen, pen, pen, pen, measure],
       [bathPaper.second, pen, pen, pen, pen, measure],
     ],
     emptyText: '',
@@ -233,6 +225,8 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           lines: [caution.text],
         })),
       ),
+      // a page of its own, without the amount, that can be handed to the second person
+      { kind: 'page-break' },
       {
         kind: 'group',
         blocks: [

@@ -58,7 +58,7 @@ export function obstacles(situation: DoseSituation, calculations: readonly Calcu
   const zone = judgement?.facts.zone ?? 'UTC'
   for (const caution of answer?.cautions ?? [])
     if (caution.level === 'stop' && !(caution.overridable && overridden.has(caution.ruleId)))
-      why.push(sayCaution(caution, zone).title)
+      why.push(`${sayCaution(caution, zone).title}. ${sayCaution(caution, zone).text}`)
   if (needsSecond(situation)) {
     const first = calculations.find((one) => one.part === 'first')
     const second = calculations.find((one) => one.part === 'second')
