@@ -103,7 +103,12 @@ export function compose(outside: Outside) {
     documents,
     treatments: quarantine.services.treatments,
   })
-  const administrations = createAdministrations({ ...parts, facility: facility.service, orders })
+  const administrations = createAdministrations({
+    ...parts,
+    facility: facility.service,
+    orders,
+    documents,
+  })
   const today = createToday({
     ...parts,
     facility: facility.service,
@@ -116,11 +121,6 @@ export function compose(outside: Outside) {
     acquisitions,
     orders,
     administrations,
-  const administrations = createAdministrations({
-    ...parts,
-    facility: facility.service,
-    orders,
-    documents,
   })
   return {
     parts,
