@@ -169,26 +169,6 @@ export const getBathSheet = contract({
   problems: ['not-found'],
 })
 
-export const getDoseCalendar = contract({
-  id: 'getDoseCalendar',
-  method: 'get',
-  path: '/orders/:number/doses',
-  action: 'order.read',
-  summary: 'Every planned dose of a signed order, and where each stands',
-  params: z.strictObject({ number: OrderNumber }),
-  reply: {
-    200: z.object({
-      number: OrderNumber,
-      now: Instant.describe('The server’s own time'),
-      enclosureCode: z.string().describe('Enclosure whose water is treated'),
-      enclosureName: z.string().describe('Its name'),
-      drug: z.string().describe('Established name of the drug'),
-      doses: z.array(PlannedDose).describe('Planned doses, in time order'),
-    }),
-  },
-  problems: ['not-found'],
-})
-
 export const printBathSheet = contract({
   id: 'printBathSheet',
   method: 'get',

@@ -10,7 +10,6 @@ import type { AdministrationsService } from './administrations.service.ts'
 export interface AdministrationsQueries {
   sheet(number: string, key: string, blind: boolean, actor: Actor): Promise<BathSheet>
   sheetOfDose(doseId: string, actor: Actor): Promise<BathSheet>
-  calendar(number: string): Promise<ReplyOf<typeof contracts.getDoseCalendar>>
   due(query: QueryOf<typeof contracts.listDueDoses>): Promise<ReplyOf<typeof contracts.listDueDoses>['rows']>
 }
 
@@ -24,7 +23,6 @@ export function administrationRoutes(
     route(contracts.getBathSheet, ({ params, query, context }) =>
       queries.sheet(params.number, params.key, query.blind === 'yes', context.actor),
     ),
-    route(contracts.getDoseCalendar, ({ params }) => queries.calendar(params.number)),
     route(contracts.printBathSheet, async ({ params, context }) => ({
       contentType: 'application/pdf',
       fileName: `${params.number}-dose-${params.key}.pdf`,

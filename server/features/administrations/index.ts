@@ -1,4 +1,3 @@
-import { doseWords } from '../../../shared/messages/doses.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
@@ -6,14 +5,14 @@ import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { Orders } from '../orders/index.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
-import { readCalculations, readDoses, readOrderNumberOfDose } from './administrations.reads.ts'
+import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
 import { BathStopRow, DoseCalculation, DoseRow } from './dose.entity.ts'
-import { planOf, readDoseSituation } from './dose-situation.ts'
+import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
-import { presentCalendar, presentSheet } from './present-sheet.ts'
+import { presentSheet } from './present-sheet.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
@@ -48,22 +47,6 @@ export function createAdministrations(
       const found = await readOrderNumberOfDose(dataSource, doseId)
       if (!found) throw new Problem('not-found')
       return queries.sheet(found.number, found.key, false, actor)
-    },
-    async calendar(number) {
-      const { content, row, block } = await orders.queries.sealed(number, undefined)
-      if (!content) throw new Problem('not-found', { detail: doseWords.unreadable })
-      const { fields, enclosure, product } = content
-      const plan = planOf(fields, block)
-      const course = { timed: fields.timing === 'timed', ended: row.phase === 'discontinued' }
-      const at = now().toISOString()
-      return {
-        number,
-        now: at,
-        enclosureCode: enclosure.code,
-        enclosureName: enclosure.name,
-        drug: product.establishedName,
-        doses: presentCalendar(plan, await readDoses(dataSource, row.id), course, at),
-      }
     },
     due: (query) => findDueDoses({ dataSource, queries: orders.queries, now }, query),
   }

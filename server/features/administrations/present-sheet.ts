@@ -138,7 +138,7 @@ function stateOf(situation: DoseSituation, calendar: BathSheet['calendar']): Bat
 }
 
 /** Every planned dose of an order with its state. */
-export function presentCalendar(
+function presentCalendar(
   plan: DoseSituation['plan'],
   records: readonly DoseReadRow[],
   course: DoseCourse,
