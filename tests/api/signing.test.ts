@@ -44,7 +44,7 @@ describe('signing', () => {
     expect(content).toEqual({ amount: '0.44 g', note: 'µ ° é' })
     expect(block).toMatchObject({
       printedName: 'Test veterinarian',
-      licence: { jurisdiction: 'Norrell Sound', number: 'VL-20417', validUntil: '2099-09-30' },
+      licence: { jurisdiction: 'Norrell Sound', number: 'VL-20417', validUntil: '2027-09-30' },
       meaning: 'author of this order',
       signedAt: '2026-12-01T18:20:00.000Z',
       signedOn: '2026-12-01',

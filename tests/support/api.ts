@@ -17,9 +17,10 @@ import { createLog } from '../../server/platform/log.ts'
 import type { Role } from '../../shared/domain/permissions/roles.ts'
 import type { SettingKey } from '../../shared/domain/settings/settings.ts'
 import { cloneDatabase } from './database.ts'
+import { testDay } from './test-time.ts'
 
 export const password = 'chart-paper-7'
-export const testDay = new Date('2026-12-01T18:20:00Z')
+export { testDay }
 
 export interface TestPerson {
   id: string
@@ -112,7 +113,7 @@ export async function startApi(given: ApiOptions = {}): Promise<TestApi> {
         jurisdiction: 'Norrell Sound',
         number: 'VL-20417',
         validFrom: '2024-01-01',
-        validUntil: '2099-09-30',
+        validUntil: '2027-09-30',
       })
     return made
   }

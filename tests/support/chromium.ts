@@ -2,6 +2,7 @@ import { chromium } from 'playwright-core'
 import type { Browser, BrowserContext, Page } from 'playwright-core'
 import { expect, onTestFinished } from 'vitest'
 import { findChromium } from '../../server/cli/chromium.mjs'
+import { putOnTestDay } from './test-time.ts'
 
 const launchArguments = [
   '--no-sandbox', // the tests may run as root
@@ -46,6 +47,7 @@ export async function newSession(browser: Browser, options: SessionOptions): Pro
     hasTouch: width < 600,
     reducedMotion: 'reduce',
   })
+  await putOnTestDay(context)
   const troubles = watchForTroubles(context, expectedErrors)
   onTestFinished(async () => {
     await context.close()

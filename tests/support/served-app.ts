@@ -6,7 +6,7 @@ import { ensureClientBuild } from '../../server/cli/client-build.mjs'
 import { builtPages } from '../../server/pages.ts'
 import { startApi } from './api.ts'
 import type { TestApi } from './api.ts'
-import { tickingClock } from './ticking-clock.ts'
+import { tickingClock } from './test-time.ts'
 
 export interface ServedApp extends TestApi {
   /** Address of the running application, API and pages, on a free port of this machine. */
@@ -16,8 +16,8 @@ export interface ServedApp extends TestApi {
 const root = path.resolve(import.meta.dirname, '../..')
 
 /**
- * The whole application as a browser meets it: the test server of `startApi` with the built client in front of it, at the
- * real time, because the page says "now" by the browser's clock. The client is built once, if it is not.
+ * The whole application as a browser meets it: the test server of `startApi` with the built client in front of it, with
+ * a clock that goes, as that of the page does. The client is built once, if it is not.
  *
  * @param given.pagesFolder another build of the client than the ordinary one
  * @param given.demo        with the practice scenario, see `startApi`
