@@ -32,11 +32,9 @@ export const animalWords = defineMessages({
   inQuarantine: 'In quarantine',
   held: 'Held',
   toExplain: (p: { count: number }) => `${String(p.count)} to explain`,
-  noneTitle: 'No animal matches',
-  none: 'Change the words or the filters, or look among those no longer here.',
+  none: 'Change what you look for, look among those no longer here, or show all.',
   noneYetTitle: 'No animals yet',
   noneYet: 'The registrar enters the first one with its acquisition.',
-  showAll: 'Show all',
   whatAnimals: 'the animals',
 
   noSuchTitle: 'No animal has this number',

@@ -18,7 +18,7 @@ export const partyWords = defineMessages({
   transactions: 'Transactions',
   save: 'Save',
   back: 'Not now',
-  empty: 'No parties match',
-  emptyBody: 'Change what you look for, or enter a party.',
+  empty: 'No other parties yet',
+  emptyBody: 'A registrar enters the first one, here or with a transaction.',
   mayNot: 'Only a registrar enters other parties.',
 })

@@ -14,7 +14,6 @@ export const registerWords = defineMessages({
   newDisposition: 'Record a departure',
 
   search: 'Find by number, party, animal or place',
-  filters: 'Filters',
   way: 'Way',
   both: 'Both',
   in: 'In',
@@ -30,8 +29,8 @@ export const registerWords = defineMessages({
   onlyOpen: 'Only those with a permit to explain',
   csv: 'CSV of this list',
   csvGuarded: 'CSV for spreadsheets',
-  empty: 'No transactions match',
-  emptyBody: 'Change what you look for, or accession animals.',
+  empty: 'No transactions yet',
+  emptyBody: 'The first one comes when a registrar accessions animals.',
 
   number: 'Number',
   date: 'Date',

@@ -19,8 +19,6 @@ export const waterWords = defineMessages({
   newEnclosure: 'New enclosure',
   map: 'Valves and bodies',
   enclosures: 'enclosures',
-  noneTitle: 'No enclosure fits',
-  none: 'Change what you search for, or show all enclosures.',
   noneYetTitle: 'No enclosure is entered yet',
   noneYet: 'Enter the first tank, pool or tub; its water is entered with it.',
   showAll: 'Show all enclosures',

@@ -1,6 +1,8 @@
 import type { ReactNode } from 'react'
 import type { UseQueryResult } from '@tanstack/react-query'
 import { sayTime } from '../../shared/messages/say-date.ts'
+import { partWords } from '../../shared/messages/parts.ts'
+import { Button } from '../ui/button.tsx'
 import type { DataTableProps, TableSort } from '../ui/data-table.tsx'
 import { ListEmpty, ListFetching, ListUnreadable } from '../ui/list-states.tsx'
 import type { ListState } from './list-state.ts'
@@ -12,9 +14,18 @@ export interface ServerPage<Row> {
   nextCursor: string | null
 }
 
+/** The sort that the address asks for; what it leaves out is as the server does it. */
+function sortOf(list: ListState, usual: TableSort | null): TableSort | null {
+  const column = list.get('sort') ?? usual?.column
+  if (column === undefined) return null
+  const asked = (['asc', 'desc'] as const).find((one) => one === list.get('direction'))
+  return { column, direction: asked ?? (column === usual?.column ? usual.direction : 'asc') }
+}
+
 /**
  * What a table needs of a list that the server searches, sorts and pages: rows, sort, pages, and what stands in their
- * place while they are fetched, cannot be read, or are none. Rows of an earlier reading stay, marked as old.
+ * place while they are fetched, cannot be read, or are none: with the way back to all of them where a search or filter
+ * is set. Rows of an earlier reading stay, marked as old.
  */
 export function listProps<Row extends object>(given: {
   query: UseQueryResult<ServerPage<Row>>
@@ -22,16 +33,16 @@ export function listProps<Row extends object>(given: {
   zone: string
   /** What is fetched, for readers: "transactions". */
   what: string
-  empty: { title: string; body: string; act?: ReactNode }
-  /** How the server sorts when nothing is said. */
-  usualSort: TableSort
+  /** What it means that there is nothing at all, and the next act. */
+  empty: { title: string; body?: string; act?: ReactNode }
+  /** What else to do where the search or filters match nothing. */
+  noMatch?: string
+  /** How the server sorts when nothing is said; null where it sorts one way only. */
+  usualSort: TableSort | null
 }): Pick<DataTableProps<Row>, 'rows' | 'sort' | 'onSort' | 'paging' | 'instead' | 'above' | 'old'> {
   const { query, list, empty } = given
   const page = query.data
-  const column = list.get('sort')
-  const sort: TableSort = column
-    ? { column, direction: list.get('direction') === 'desc' ? 'desc' : 'asc' }
-    : given.usualSort
+  const sort = sortOf(list, given.usualSort)
   const old = query.isError && page !== undefined
   const unreadable = isProblem(query.error) ? (
     <ListUnreadable
@@ -52,7 +63,14 @@ export function listProps<Row extends object>(given: {
     return {
       ...shared,
       above: unreadable,
-      instead: (
+      instead: list.narrowed ? (
+        <ListEmpty
+          title={partWords.noneMatch}
+          act={<Button onClick={list.showAll}>{partWords.showAll}</Button>}
+        >
+          {given.noMatch ?? partWords.noneMatchBody}
+        </ListEmpty>
+      ) : (
         <ListEmpty title={empty.title} act={empty.act}>
           {empty.body}
         </ListEmpty>

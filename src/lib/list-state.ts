@@ -7,6 +7,12 @@ export interface ListState {
   get: (name: string) => string | undefined
   /** Sets filters and goes back to the first page; an empty value takes a filter away. */
   set: (changes: Readonly<Record<string, string | undefined>>) => void
+  /** Whether a search or a filter leaves rows out. */
+  narrowed: boolean
+  /** Takes the search and every filter away; the order stays. */
+  showAll: () => void
+  /** What the fold of filters needs to know. */
+  filters: { inUse: number; onShowAll: () => void }
   cursor: string | undefined
   /** Number of the first row shown, from 1. */
   from: number
@@ -15,6 +21,8 @@ export interface ListState {
   /** Goes to the page before; undefined on the first. */
   before: (() => void) | undefined
 }
+
+const notFilters = ['sort', 'direction', 'cursor', 'from']
 
 /**
  * The state of a list, kept in the address bar, so that a link, a reload and the way back show the same rows.
@@ -37,12 +45,18 @@ export function useListState(): ListState {
     )
   const cursor = search.get('cursor') ?? undefined
   const from = Number(search.get('from') ?? '1') || 1
+  const narrowedBy = [...new Set(search.keys())].filter((name) => !notFilters.includes(name))
+  const set: ListState['set'] = (changes) => {
+    setPassed([])
+    change({ ...changes, cursor: undefined, from: undefined })
+  }
+  const showAll = () => set(Object.fromEntries(narrowedBy.map((name) => [name, undefined])))
   return {
     get: (name) => search.get(name) ?? undefined,
-    set: (changes) => {
-      setPassed([])
-      change({ ...changes, cursor: undefined, from: undefined })
-    },
+    set,
+    narrowed: narrowedBy.length > 0,
+    showAll,
+    filters: { inUse: narrowedBy.filter((name) => name !== 'q').length, onShowAll: showAll },
     cursor,
     from,
     next: (nextCursor, shown) => {

@@ -20,6 +20,11 @@ export interface TableColumn<Row> {
   /** What a list held in memory sorts by; with sorting on the server, `true` says the server can. */
   sort?: true | ((row: Row) => string | number)
   className?: string
+  /**
+   * On a phone a row is a card: its first column and those marked `head` stand on the first line, the others below it,
+   * each with its heading before it; `short` ones two to a line. An empty cell takes no room there.
+   */
+  narrow?: 'head' | 'short'
 }
 
 export const features = tableFeatures({

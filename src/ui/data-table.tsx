@@ -4,11 +4,12 @@ import { useTable } from '@tanstack/react-table'
 import type { SortingState } from '@tanstack/react-table'
 import { ArrowDown, ArrowUp, ChevronsUpDown } from 'lucide-react'
 import { partWords } from '../../shared/messages/parts.ts'
-import { Button } from './button.tsx'
 import { classNames } from './class-names.ts'
 import { features, toTableColumns } from './data-table-columns.ts'
 import type { TableColumn } from './data-table-columns.ts'
 import { Icon } from './icon.tsx'
+import { TableFoot } from './table-foot.tsx'
+import { TableSortChoice } from './table-sort-choice.tsx'
 
 export interface TableSort {
   column: string
@@ -49,7 +50,11 @@ export interface DataTableProps<Row extends object> {
   above?: ReactNode
 }
 
-/** A list. The head sticks; on a narrow screen the first column too. Arrow keys go from row to row along one column. */
+/**
+ * A list. The head sticks; below 900 px the first column too, and on a phone a row is a card of labelled lines (the
+ * roles are said outright, because the style takes the table's own display away there). Arrow keys go from row to row
+ * along one column.
+ */
 export function DataTable<Row extends object>(props: DataTableProps<Row>) {
   const { columns, rows, paging, sort, onSort } = props
   const [ownSort, setOwnSort] = useState<SortingState>([])
@@ -92,22 +97,31 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
   return (
     <div>
       {props.above}
+      {props.instead || rows.length < 2 ? null : (
+        <TableSortChoice
+          columns={columns}
+          sorting={sorting[0]}
+          onSort={(next) => table.getColumn(next.id)?.toggleSorting(next.desc)}
+        />
+      )}
       <div className="table-scroll">
         <table
+          role="table"
           className={classNames(
             'data-table',
             props.density && props.density !== 'usual' && `is-${props.density}`,
           )}
           aria-label={props.label}
         >
-          <thead>
-            <tr>
+          <thead role="rowgroup">
+            <tr role="row">
               {table.getFlatHeaders().map((header) => {
                 const column = byId.get(header.column.id)
                 const sorted = header.column.getIsSorted()
                 return (
                   <th
                     key={header.id}
+                    role="columnheader"
                     scope="col"
                     className={classNames(column?.number && 'is-number', column?.className)}
                     aria-sort={sorted === 'asc' ? 'ascending' : sorted === 'desc' ? 'descending' : undefined}
@@ -128,12 +142,13 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
             </tr>
           </thead>
           {props.instead ? null : (
-            <tbody ref={body} onKeyDown={onKeyDown}>
+            <tbody role="rowgroup" ref={body} onKeyDown={onKeyDown}>
               {table.getRowModel().rows.map((row) => {
                 const late = props.lateBy?.(row.original) ?? null
                 return (
                   <tr
                     key={row.id}
+                    role="row"
                     className={classNames(
                       late !== null && 'is-late',
                       props.selected?.(row.original) && 'is-selected',
@@ -145,9 +160,14 @@ export function DataTable<Row extends object>(props: DataTableProps<Row>) {
                       return (
                         <td
                           key={cell.id}
-                          // what the heading says, for lists that become cards on a phone
-                          data-heading={column?.heading}
-                          className={classNames(column?.number && 'is-number', column?.className)}
+                          role="cell"
+                          data-label={i === 0 ? undefined : column?.heading}
+                          className={classNames(
+                            column?.number && 'is-number',
+                            (i === 0 || column?.narrow === 'head') && 'is-head',
+                            column?.narrow === 'short' && 'is-short',
+                            column?.className,
+                          )}
                         >
                           <table.FlexRender cell={cell} />
                           {i === 0 && late !== null ? (
@@ -192,43 +212,6 @@ function footOf(paging: TablePaging | undefined, count: number, page: number, si
   if (paging?.kind === 'server')
     return { from: paging.from, to: paging.from + count - 1, total: paging.total }
   return { from: page * size + 1, to: Math.min(count, (page + 1) * size), total: count }
-}
-
-/** Says which rows are shown of how many; with pages, goes to the one before and after. */
-function TableFoot({
-  label,
-  from,
-  to,
-  total,
-  onBefore,
-  onNext,
-}: {
-  label: string
-  from: number
-  to: number
-  total: number
-  onBefore: (() => void) | undefined
-  onNext: (() => void) | undefined
-}) {
-  if (total === 0) return null
-  const n = (value: number) => value.toLocaleString('en-GB')
-  return (
-    <nav className="table-foot" aria-label={partWords.pagesOf({ table: label })}>
-      <span role="status">
-        {total === 1 ? partWords.oneRow : partWords.rowsShown({ from: n(from), to: n(to), total: n(total) })}
-      </span>
-      {onBefore || onNext ? (
-        <span className="row">
-          <Button size="small" disabled={!onBefore} onClick={onBefore}>
-            {partWords.pageBefore}
-          </Button>
-          <Button size="small" disabled={!onNext} onClick={onNext}>
-            {partWords.nextPage}
-          </Button>
-        </span>
-      ) : null}
-    </nav>
-  )
 }
 
 /** The control of another row that an arrow, Home or End leads to: the same one in the row, where there is one. */

@@ -34,6 +34,7 @@ const columns = (): TableColumn<TransactionRow>[] => [
   {
     id: 'date',
     heading: words.date,
+    narrow: 'head',
     sort: true,
     cell: (row) => <span className="num">{sayDate(row.on)}</span>,
   },

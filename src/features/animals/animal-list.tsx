@@ -1,8 +1,5 @@
-import { useState } from 'react'
-import type { ReactNode } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
-import { Download } from 'lucide-react'
 import { animalSorts, listAnimalsCsv } from '../../../shared/contracts/animals.contract.ts'
 import type { AnimalRow } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as forms } from '../../../shared/domain/animals/description.ts'
@@ -11,19 +8,18 @@ import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { taxonGroupNames } from '../../../shared/messages/animals.ts'
 import { addressOf } from '../../lib/api-client.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
+import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
-import { Button } from '../../ui/button.tsx'
-import { Cartouche } from '../../ui/cartouche.tsx'
+import { SearchField } from '../../lib/search-field.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { DownloadLink } from '../../ui/download-link.tsx'
+import { Filters } from '../../ui/filters.tsx'
+import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
-import { Area, Sheet } from '../../ui/sheet.tsx'
-import { TextField } from '../../ui/text-field.tsx'
 import { countText } from './animal-name.ts'
 import { sayDayOrTime } from './say-day-or-time.ts'
 import { animalListQuery } from './queries.ts'
@@ -48,6 +44,7 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
     {
       id: 'name',
       heading: words.animal,
+      narrow: 'head',
       sort: true,
       cell: (row) => (
         <>
@@ -60,6 +57,7 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
     {
       id: 'count',
       heading: words.count,
+      narrow: 'head',
       sort: true,
       number: true,
       cell: (row) => (row.form === 'individual' ? '' : countText(row.count)),
@@ -67,8 +65,9 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
     {
       id: 'place',
       heading: words.place,
+      narrow: 'short',
       sort: true,
-      className: 'pl-5',
+      className: 'min-[601px]:pl-5',
       cell: (row) =>
         row.place ? (
           <>
@@ -80,6 +79,14 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
         ) : (
           <span className="t-2">{words.notHere}</span>
         ),
+    },
+    {
+      id: 'arrived',
+      heading: words.since,
+      narrow: 'short',
+      sort: true,
+      className: 'min-[601px]:pl-5',
+      cell: (row) => (row.since ? sayDayOrTime(row.since, p.zone, p.now) : ''),
     },
     {
       id: 'weight',
@@ -96,13 +103,6 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
           ''
         ),
     },
-    {
-      id: 'arrived',
-      heading: words.since,
-      sort: true,
-      className: 'pl-5',
-      cell: (row) => (row.since ? sayDayOrTime(row.since, p.zone, p.now) : ''),
-    },
     { id: 'standing', heading: words.standing, cell: (row) => <Standing animal={row} /> },
   ]
 }
@@ -111,11 +111,10 @@ const oneOf = <T extends string>(known: readonly T[], said: string | undefined):
   known.find((one) => one === said)
 
 /** Every animal and group. Search, filters, order and page stand in the address. */
-export function AnimalList({ acts }: { acts?: ReactNode }) {
+export function AnimalList() {
   const me = useMe()
   const list = useListState()
   const now = useFacilityNow(me.facility.zone)
-  const [typed, setTyped] = useState(list.get('q') ?? '')
   const filter: AnimalListQuery = {
     q: list.get('q'),
     group: oneOf(groups, list.get('group')),
@@ -127,35 +126,15 @@ export function AnimalList({ acts }: { acts?: ReactNode }) {
     direction: oneOf(['asc', 'desc'] as const, list.get('direction')),
   }
   const query = useQuery(animalListQuery({ ...filter, cursor: list.cursor }))
-  const reply = query.data
-  const filtered = Boolean(
-    filter.q ?? filter.group ?? filter.form ?? filter.place ?? filter.area ?? filter.state,
-  )
-  const { nextCursor } = reply ?? {}
-  const search = () => {
-    if (typed.trim() !== (list.get('q') ?? '')) list.set({ q: typed.trim() || undefined })
-  }
 
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche place={words.title} title={words.listTitle} source={words.listSource({ at: now.time })} />
-        <form
-          className="pane stack"
-          role="search"
-          onSubmit={(event) => {
-            event.preventDefault()
-            search()
-          }}
-        >
-          <TextField
-            label={words.find}
-            type="search"
-            value={typed}
-            maxLength={200}
-            onChange={(event) => setTyped(event.target.value)}
-            onBlur={search}
-          />
+    <ListSheet
+      place={words.title}
+      title={words.listTitle}
+      source={words.listSource({ at: now.time })}
+      search={<SearchField label={words.find} list={list} />}
+      filters={
+        <Filters {...list.filters}>
           <SelectField
             label={words.group}
             startsEmpty={false}
@@ -188,76 +167,30 @@ export function AnimalList({ acts }: { acts?: ReactNode }) {
             value={filter.state ?? ''}
             onChange={(event) => list.set({ state: event.target.value })}
           />
-        </form>
-        <div className="pane stack justify-items-start">
-          {acts}
-          <a className="btn" href={addressOf(listAnimalsCsv, {}, { ...filter })} download>
-            <Download className="icon" aria-hidden="true" />
-            {words.downloadCsv}
-          </a>
-        </div>
-      </Area>
-      <Area className="pane">
-        <DataTable
-          label={words.listTitle}
-          columns={columnsOf({
-            zone: me.facility.zone,
-            now: new Date(query.dataUpdatedAt || Date.now()).toISOString(),
-            massUnit: me.preferences['massUnit'],
-          })}
-          rows={reply?.rows ?? []}
-          rowKey={(row) => row.id}
-          sort={{ column: filter.sort ?? 'accession', direction: filter.direction ?? 'asc' }}
-          onSort={({ column, direction }) => list.set({ sort: column, direction })}
-          paging={{
-            kind: 'server',
-            from: list.from,
-            total: reply?.total ?? 0,
-            onBefore: list.before,
-            onNext: nextCursor ? () => list.next(nextCursor, reply?.rows.length ?? 0) : undefined,
-          }}
-          old={isProblem(query.error) && reply !== undefined}
-          above={
-            isProblem(query.error) ? (
-              <ListUnreadable
-                why={query.error.says}
-                code={query.error.requestId}
-                onRetry={() => void query.refetch()}
-              />
-            ) : undefined
-          }
-          instead={
-            query.isPending ? (
-              <ListFetching what={words.whatAnimals} />
-            ) : reply?.rows.length === 0 ? (
-              <ListEmpty
-                title={filtered ? words.noneTitle : words.noneYetTitle}
-                act={
-                  filtered ? (
-                    <Button
-                      onClick={() => {
-                        setTyped('')
-                        list.set({
-                          q: undefined,
-                          group: undefined,
-                          form: undefined,
-                          place: undefined,
-                          area: undefined,
-                          state: undefined,
-                        })
-                      }}
-                    >
-                      {words.showAll}
-                    </Button>
-                  ) : undefined
-                }
-              >
-                {filtered ? words.none : words.noneYet}
-              </ListEmpty>
-            ) : undefined
-          }
-        />
-      </Area>
-    </Sheet>
+        </Filters>
+      }
+      acts={
+        <DownloadLink href={addressOf(listAnimalsCsv, {}, { ...filter })}>{words.downloadCsv}</DownloadLink>
+      }
+    >
+      <DataTable
+        label={words.listTitle}
+        columns={columnsOf({
+          zone: me.facility.zone,
+          now: new Date(query.dataUpdatedAt || Date.now()).toISOString(),
+          massUnit: me.preferences['massUnit'],
+        })}
+        rowKey={(row) => row.id}
+        {...listProps({
+          query,
+          list,
+          zone: me.facility.zone,
+          what: words.whatAnimals,
+          noMatch: words.none,
+          empty: { title: words.noneYetTitle, body: words.noneYet },
+          usualSort: { column: 'accession', direction: 'asc' },
+        })}
+      />
+    </ListSheet>
   )
 }

@@ -5,6 +5,7 @@ import { Tag } from '../../ui/tag.tsx'
 
 /** How an animal stands, in one cell of a list: quarantine, hold, and what waits to be explained. */
 export function Standing({ animal }: { animal: Pick<AnimalRow, 'lock' | 'openDiscrepancies'> }) {
+  if (animal.lock === 'none' && animal.openDiscrepancies === 0) return null
   return (
     <span className="row row-wrap gap-2">
       {animal.lock === 'boundary' ? <FlagWords flag="Q">{words.inQuarantine}</FlagWords> : null}

@@ -44,6 +44,7 @@ export function ExportsList({ list, above }: { list: ListState; above?: ReactNod
     {
       id: 'accession',
       heading: words.animal,
+      narrow: 'head',
       sort: true,
       cell: (row) => <Link to={paths.history(row.accession)}>{row.accession}</Link>,
     },

@@ -1,25 +1,22 @@
-import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
-import { Search, UserPlus } from 'lucide-react'
+import { UserPlus } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import type { PersonRow } from '../../../shared/contracts/people.contract.ts'
 import { roles } from '../../../shared/domain/permissions/roles.ts'
 import { licenceSummaries, peopleWords, roleTitles } from '../../../shared/messages/people.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
+import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
+import { SearchField } from '../../lib/search-field.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
-import { Button } from '../../ui/button.tsx'
-import { Cartouche } from '../../ui/cartouche.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
 import { DataTable } from '../../ui/data-table.tsx'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { Filters } from '../../ui/filters.tsx'
+import { ListSheet } from '../../ui/list-sheet.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
-import { Area, Sheet } from '../../ui/sheet.tsx'
 import { Tag } from '../../ui/tag.tsx'
-import { TextField } from '../../ui/text-field.tsx'
 import { peopleListQuery } from './queries.ts'
 import type { PeopleQuery } from './queries.ts'
 
@@ -67,7 +64,6 @@ const sorts = ['name', 'email', 'lastSignIn'] as const
 export function PeopleList() {
   const me = useMe()
   const list = useListState()
-  const [typed, setTyped] = useState(list.get('q') ?? '')
   const filter: PeopleQuery = {
     q: list.get('q'),
     role: roles.find((role) => role === list.get('role')),
@@ -76,31 +72,20 @@ export function PeopleList() {
     direction: (['asc', 'desc'] as const).find((one) => one === list.get('direction')),
   }
   const query = useQuery(peopleListQuery({ ...filter, cursor: list.cursor }))
-  const reply = query.data
-  const problem = isProblem(query.error) ? query.error : null
-  const { nextCursor } = reply ?? {}
 
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche place={peopleWords.place} title={peopleWords.title} source={peopleWords.source} />
-        <form
-          className="pane stack"
-          role="search"
-          onSubmit={(event) => {
-            event.preventDefault()
-            list.set({ q: typed.trim() || undefined })
-          }}
-        >
-          <TextField
-            label={peopleWords.search}
-            value={typed}
-            type="search"
-            onChange={(event) => setTyped(event.target.value)}
-          />
-          <Button type="submit" icon={Search}>
-            {peopleWords.find}
-          </Button>
+    <ListSheet
+      place={peopleWords.place}
+      title={peopleWords.title}
+      source={peopleWords.source}
+      primary={
+        <ButtonLink to={paths.newPerson()} kind="primary" block icon={UserPlus}>
+          {peopleWords.enter}
+        </ButtonLink>
+      }
+      search={<SearchField label={peopleWords.search} list={list} />}
+      filters={
+        <Filters {...list.filters}>
           <SelectField
             label={peopleWords.role}
             startsEmpty={false}
@@ -109,7 +94,7 @@ export function PeopleList() {
               ...roles.map((role) => ({ value: role, label: roleTitles[role] })),
             ]}
             value={filter.role ?? ''}
-            onChange={(event) => list.set({ role: event.target.value || undefined })}
+            onChange={(event) => list.set({ role: event.target.value })}
           />
           <SelectField
             label={peopleWords.account}
@@ -120,50 +105,24 @@ export function PeopleList() {
               { value: 'no', label: peopleWords.closed },
             ]}
             value={filter.active ?? ''}
-            onChange={(event) => list.set({ active: event.target.value || undefined })}
+            onChange={(event) => list.set({ active: event.target.value })}
           />
-        </form>
-      </Area>
-      <Area className="pane stack">
-        <div className="row row-between row-wrap">
-          <h2 className="t-head">{peopleWords.people}</h2>
-          <ButtonLink to={paths.newPerson()} kind="primary" icon={UserPlus}>
-            {peopleWords.enter}
-          </ButtonLink>
-        </div>
-        <DataTable
-          label={peopleWords.list}
-          columns={columnsOf(me.facility.zone)}
-          rows={reply?.rows ?? []}
-          rowKey={(row) => row.id}
-          sort={{ column: filter.sort ?? 'name', direction: filter.direction ?? 'asc' }}
-          onSort={({ column, direction }) => list.set({ sort: column, direction })}
-          old={problem !== null}
-          above={
-            problem ? (
-              <ListUnreadable
-                why={problem.says}
-                code={problem.requestId}
-                onRetry={() => void query.refetch()}
-              />
-            ) : null
-          }
-          paging={{
-            kind: 'server',
-            from: list.from,
-            total: reply?.total ?? 0,
-            onBefore: list.before,
-            onNext: nextCursor && reply ? () => list.next(nextCursor, reply.rows.length) : undefined,
-          }}
-          instead={
-            query.isPending ? (
-              <ListFetching what={peopleWords.list} />
-            ) : reply?.rows.length === 0 ? (
-              <ListEmpty title={peopleWords.noneFound}>{peopleWords.noneFoundText}</ListEmpty>
-            ) : undefined
-          }
-        />
-      </Area>
-    </Sheet>
+        </Filters>
+      }
+    >
+      <DataTable
+        label={peopleWords.list}
+        columns={columnsOf(me.facility.zone)}
+        rowKey={(row) => row.id}
+        {...listProps({
+          query,
+          list,
+          zone: me.facility.zone,
+          what: peopleWords.list,
+          empty: { title: peopleWords.noneFound },
+          usualSort: { column: 'name', direction: 'asc' },
+        })}
+      />
+    </ListSheet>
   )
 }

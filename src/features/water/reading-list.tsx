@@ -1,7 +1,7 @@
 import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
-import { Download, Plus } from 'lucide-react'
+import { Plus } from 'lucide-react'
 import { exportReadings } from '../../../shared/contracts/water.contract.ts'
 import type { ReadingRow } from '../../../shared/contracts/water-facts.ts'
 import { readingParameters } from '../../../shared/domain/readings/parameters.ts'
@@ -10,19 +10,19 @@ import { parameterNames, phScaleNames, readingLevels } from '../../../shared/mes
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { addressOf } from '../../lib/api-client.ts'
+import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
-import { Cartouche } from '../../ui/cartouche.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { DownloadLink } from '../../ui/download-link.tsx'
+import { Filters } from '../../ui/filters.tsx'
+import { ListSheet } from '../../ui/list-sheet.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
-import { Area, Sheet } from '../../ui/sheet.tsx'
 import { Tick } from '../../ui/tick.tsx'
 import { useVoidRecord } from './mutations.ts'
 import { readingListQuery } from './queries.ts'
@@ -45,11 +45,13 @@ function columnsOf(
     {
       id: 'parameter',
       heading: readingWords.parameter,
+      narrow: 'head',
       cell: (row) => parameterHeading(row.parameter),
     },
     {
       id: 'value',
       heading: readingWords.value,
+      narrow: 'head',
       number: true,
       cell: (row) => (
         <span data-quantity="reading" className={row.voided ? 'line-through' : undefined}>
@@ -108,24 +110,27 @@ export function ReadingList({ code }: { code: string }) {
     direction: list.get('direction') === 'asc' ? ('asc' as const) : undefined,
   }
   const query = useQuery(readingListQuery(code, { ...filter, cursor: list.cursor }))
-  const reply = query.data
-  const { nextCursor } = reply ?? {}
 
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche
-          place={
-            <>
-              <Link to={paths.water()}>{waterWords.title}</Link>
-              {' / '}
-              <Link to={paths.enclosure(code)}>{code}</Link>
-            </>
-          }
-          title={readingWords.listTitle}
-          source={readingWords.listSource}
-        />
-        <div className="pane stack">
+    <ListSheet
+      place={
+        <>
+          <Link to={paths.water()}>{waterWords.title}</Link>
+          {' / '}
+          <Link to={paths.enclosure(code)}>{code}</Link>
+        </>
+      }
+      title={readingWords.listTitle}
+      source={readingWords.listSource}
+      primary={
+        may.allowed ? (
+          <ButtonLink kind="primary" block icon={Plus} to={paths.enclosureMeasure(code)}>
+            {readingWords.add}
+          </ButtonLink>
+        ) : null
+      }
+      filters={
+        <Filters {...list.filters}>
           <SelectField
             label={readingWords.parameter}
             startsEmpty={false}
@@ -141,63 +146,37 @@ export function ReadingList({ code }: { code: string }) {
             checked={filter.voided === 'with'}
             onChange={(event) => list.set({ voided: event.target.checked ? 'with' : undefined })}
           />
-        </div>
-        <div className="pane stack justify-items-start">
-          {may.allowed ? (
-            <ButtonLink kind="primary" icon={Plus} to={paths.enclosureMeasure(code)}>
-              {readingWords.add}
-            </ButtonLink>
-          ) : null}
-          <a className="btn" href={addressOf(exportReadings, { code }, filter)} download>
-            <Download className="icon" aria-hidden="true" />
-            {waterWords.downloadCsv}
-          </a>
-        </div>
-      </Area>
-      <Area className="pane">
-        <DataTable
-          label={readingWords.listTitle}
-          columns={columnsOf(
-            me.facility.zone,
-            me.preferences['temperatureUnit'],
-            may.allowed ? (row) => setAsked(row) : undefined,
-          )}
-          rows={reply?.rows ?? []}
-          rowKey={(row) => row.id}
-          sort={{ column: 'happenedAt', direction: filter.direction ?? 'desc' }}
-          onSort={({ direction }) => list.set({ direction: direction === 'asc' ? 'asc' : undefined })}
-          paging={{
-            kind: 'server',
-            from: list.from,
-            total: reply?.total ?? 0,
-            onBefore: list.before,
-            onNext: nextCursor ? () => list.next(nextCursor, reply?.rows.length ?? 0) : undefined,
-          }}
-          old={isProblem(query.error) && reply !== undefined}
-          above={
-            isProblem(query.error) ? (
-              <ListUnreadable
-                why={query.error.says}
-                code={query.error.requestId}
-                onRetry={() => void query.refetch()}
-              />
-            ) : undefined
-          }
-          instead={
-            query.isPending ? (
-              <ListFetching what={readingWords.rows} />
-            ) : reply?.rows.length === 0 ? (
-              <ListEmpty title={readingWords.none} />
-            ) : undefined
-          }
+        </Filters>
+      }
+      acts={
+        <DownloadLink href={addressOf(exportReadings, { code }, filter)}>
+          {waterWords.downloadCsv}
+        </DownloadLink>
+      }
+    >
+      <DataTable
+        label={readingWords.listTitle}
+        columns={columnsOf(
+          me.facility.zone,
+          me.preferences['temperatureUnit'],
+          may.allowed ? (row) => setAsked(row) : undefined,
+        )}
+        rowKey={(row) => row.id}
+        {...listProps({
+          query,
+          list,
+          zone: me.facility.zone,
+          what: readingWords.rows,
+          empty: { title: readingWords.none },
+          usualSort: { column: 'happenedAt', direction: 'desc' },
+        })}
+      />
+      {asked ? (
+        <StrikeDialog
+          onBack={() => setAsked(null)}
+          onStrike={(given) => strike.mutateAsync({ kind: 'reading', id: asked.id, ...given })}
         />
-        {asked ? (
-          <StrikeDialog
-            onBack={() => setAsked(null)}
-            onStrike={(given) => strike.mutateAsync({ kind: 'reading', id: asked.id, ...given })}
-          />
-        ) : null}
-      </Area>
-    </Sheet>
+      ) : null}
+    </ListSheet>
   )
 }

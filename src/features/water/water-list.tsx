@@ -1,7 +1,6 @@
-import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
-import { Download, Network, Plus } from 'lucide-react'
+import { Network, Plus } from 'lucide-react'
 import { exportWater } from '../../../shared/contracts/water.contract.ts'
 import type { WaterListRow } from '../../../shared/contracts/water.contract.ts'
 import { volumeStates } from '../../../shared/messages/water.ts'
@@ -9,20 +8,19 @@ import { parameterNames } from '../../../shared/messages/water.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { addressOf } from '../../lib/api-client.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
+import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
-import { Button } from '../../ui/button.tsx'
+import { SearchField } from '../../lib/search-field.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
-import { Cartouche } from '../../ui/cartouche.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { DownloadLink } from '../../ui/download-link.tsx'
+import { Filters } from '../../ui/filters.tsx'
+import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
-import { Area, Sheet } from '../../ui/sheet.tsx'
-import { TextField } from '../../ui/text-field.tsx'
 import { netVolumeText, volumeUnitOf } from './net-volume.tsx'
 import { waterListQuery } from './queries.ts'
 import type { WaterListQuery } from './queries.ts'
@@ -55,6 +53,7 @@ function columnsOf(p: {
     {
       id: 'name',
       heading: waterWords.name,
+      narrow: 'head',
       sort: true,
       cell: (row) => (row.treatmentVessel ? `${row.name}, ${waterWords.treatmentVessel}` : row.name),
     },
@@ -118,7 +117,6 @@ export function WaterList() {
   const me = useMe()
   const list = useListState()
   const now = useFacilityNow(me.facility.zone)
-  const [typed, setTyped] = useState(list.get('q') ?? '')
   const filter: WaterListQuery = {
     q: list.get('q'),
     area: list.get('area'),
@@ -132,35 +130,22 @@ export function WaterList() {
   const query = useQuery(waterListQuery({ ...filter, cursor: list.cursor }))
   const reply = query.data
   const mayConfigure = reply?.may.includes('water.configure') ?? false
-  const filtered = Boolean(filter.q ?? filter.area ?? filter.state)
-  const { nextCursor } = reply ?? {}
 
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche
-          place={waterWords.title}
-          title={waterWords.listTitle}
-          source={waterWords.listSource({ at: now.time })}
-        />
-        <form
-          className="pane stack"
-          role="search"
-          onSubmit={(event) => {
-            event.preventDefault()
-            list.set({ q: typed.trim() || undefined })
-          }}
-        >
-          <TextField
-            label={waterWords.find}
-            type="search"
-            value={typed}
-            maxLength={200}
-            onChange={(event) => setTyped(event.target.value)}
-            onBlur={() => {
-              if (typed.trim() !== (list.get('q') ?? '')) list.set({ q: typed.trim() || undefined })
-            }}
-          />
+    <ListSheet
+      place={waterWords.title}
+      title={waterWords.listTitle}
+      source={waterWords.listSource({ at: now.time })}
+      primary={
+        mayConfigure ? (
+          <ButtonLink kind="primary" block icon={Plus} to={paths.newEnclosure()}>
+            {waterWords.newEnclosure}
+          </ButtonLink>
+        ) : null
+      }
+      search={<SearchField label={waterWords.find} list={list} />}
+      filters={
+        <Filters {...list.filters}>
           <SelectField
             label={waterWords.area}
             startsEmpty={false}
@@ -181,71 +166,36 @@ export function WaterList() {
             value={filter.state ?? ''}
             onChange={(event) => list.set({ state: event.target.value })}
           />
-        </form>
-        <div className="pane stack justify-items-start">
-          {mayConfigure ? (
-            <ButtonLink kind="primary" icon={Plus} to={paths.newEnclosure()}>
-              {waterWords.newEnclosure}
-            </ButtonLink>
-          ) : null}
+        </Filters>
+      }
+      acts={
+        <>
           <ButtonLink icon={Network} to={paths.waterMap()}>
             {waterWords.map}
           </ButtonLink>
-          <a className="btn" href={addressOf(exportWater, {}, { ...filter })} download>
-            <Download className="icon" aria-hidden="true" />
+          <DownloadLink href={addressOf(exportWater, {}, { ...filter })}>
             {waterWords.downloadCsv}
-          </a>
-        </div>
-      </Area>
-      <Area className="pane">
-        <DataTable
-          label={waterWords.listTitle}
-          columns={columnsOf({
-            volumeUnit: me.preferences['volumeUnit'],
-            temperatureUnit: me.preferences['temperatureUnit'],
-            nowMs: query.dataUpdatedAt || Date.now(),
-          })}
-          rows={reply?.rows ?? []}
-          rowKey={(row) => row.id}
-          sort={{ column: filter.sort ?? 'code', direction: filter.direction ?? 'asc' }}
-          onSort={({ column, direction }) => list.set({ sort: column, direction })}
-          paging={{
-            kind: 'server',
-            from: list.from,
-            total: reply?.total ?? 0,
-            onBefore: list.before,
-            onNext: nextCursor ? () => list.next(nextCursor, reply?.rows.length ?? 0) : undefined,
-          }}
-          old={isProblem(query.error) && reply !== undefined}
-          above={
-            isProblem(query.error) ? (
-              <ListUnreadable
-                why={query.error.says}
-                code={query.error.requestId}
-                onRetry={() => void query.refetch()}
-              />
-            ) : undefined
-          }
-          instead={
-            query.isPending ? (
-              <ListFetching what={waterWords.enclosures} />
-            ) : reply?.rows.length === 0 ? (
-              <ListEmpty
-                title={filtered ? waterWords.noneTitle : waterWords.noneYetTitle}
-                act={
-                  filtered ? (
-                    <Button onClick={() => list.set({ q: undefined, area: undefined, state: undefined })}>
-                      {waterWords.showAll}
-                    </Button>
-                  ) : undefined
-                }
-              >
-                {filtered ? waterWords.none : waterWords.noneYet}
-              </ListEmpty>
-            ) : undefined
-          }
-        />
-      </Area>
-    </Sheet>
+          </DownloadLink>
+        </>
+      }
+    >
+      <DataTable
+        label={waterWords.listTitle}
+        columns={columnsOf({
+          volumeUnit: me.preferences['volumeUnit'],
+          temperatureUnit: me.preferences['temperatureUnit'],
+          nowMs: query.dataUpdatedAt || Date.now(),
+        })}
+        rowKey={(row) => row.id}
+        {...listProps({
+          query,
+          list,
+          zone: me.facility.zone,
+          what: waterWords.enclosures,
+          empty: { title: waterWords.noneYetTitle, body: waterWords.noneYet },
+          usualSort: { column: 'code', direction: 'asc' },
+        })}
+      />
+    </ListSheet>
   )
 }

@@ -5,12 +5,11 @@ import { registerWords } from '../../../../shared/messages/register-sheet.ts'
 import { PartiesList, PartyDialog } from '../../../features/counterparties/index.ts'
 import { useListState } from '../../../lib/list-state.ts'
 import { useMay } from '../../../lib/may.ts'
+import { SearchField } from '../../../lib/search-field.tsx'
 import { Button } from '../../../ui/button.tsx'
-import { Cartouche } from '../../../ui/cartouche.tsx'
-import { Area, Sheet } from '../../../ui/sheet.tsx'
+import { ListSheet } from '../../../ui/list-sheet.tsx'
 import { useSheetTitle } from '../../shell/use-sheet-title.ts'
 import { RegisterPages } from './register-pages.tsx'
-import { SearchField } from './search-field.tsx'
 
 /** The other parties on file. */
 export function Component() {
@@ -19,27 +18,26 @@ export function Component() {
   const may = useMay('register.manage')
   const [entering, setEntering] = useState(false)
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche place={registerWords.title} title={words.title} source={words.source} />
-        <div className="pane stack gap-4">
-          <RegisterPages />
-          <Button
-            kind="primary"
-            block
-            icon={Plus}
-            shut={!may.allowed && words.mayNot}
-            onClick={() => setEntering(true)}
-          >
-            {words.enter}
-          </Button>
-          <SearchField label={words.search} list={list} />
-        </div>
-      </Area>
-      <Area className="pane">
-        <PartiesList list={list} />
-        {entering ? <PartyDialog party={null} onBack={() => setEntering(false)} /> : null}
-      </Area>
-    </Sheet>
+    <ListSheet
+      place={registerWords.title}
+      title={words.title}
+      source={words.source}
+      pages={<RegisterPages />}
+      primary={
+        <Button
+          kind="primary"
+          block
+          icon={Plus}
+          shut={!may.allowed && words.mayNot}
+          onClick={() => setEntering(true)}
+        >
+          {words.enter}
+        </Button>
+      }
+      search={<SearchField label={words.search} list={list} />}
+    >
+      <PartiesList list={list} />
+      {entering ? <PartyDialog party={null} onBack={() => setEntering(false)} /> : null}
+    </ListSheet>
   )
 }

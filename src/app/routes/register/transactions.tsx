@@ -1,4 +1,4 @@
-import { ArrowDownToLine, ArrowUpFromLine, Download } from 'lucide-react'
+import { ArrowDownToLine, ArrowUpFromLine } from 'lucide-react'
 import { transactionKindNames as kinds } from '../../../../shared/domain/register/transaction-kinds.ts'
 import { transactionKindNames } from '../../../../shared/messages/register-kinds.ts'
 import { registerWords as words } from '../../../../shared/messages/register-sheet.ts'
@@ -10,115 +10,106 @@ import {
 import { useListState } from '../../../lib/list-state.ts'
 import { useMay } from '../../../lib/may.ts'
 import { paths } from '../../../lib/paths.ts'
+import { SearchField } from '../../../lib/search-field.tsx'
 import { ButtonLink } from '../../../ui/button-link.tsx'
-import { Cartouche } from '../../../ui/cartouche.tsx'
 import { ChoiceField } from '../../../ui/choice-field.tsx'
-import { Icon } from '../../../ui/icon.tsx'
+import { DownloadLink } from '../../../ui/download-link.tsx'
+import { Filters } from '../../../ui/filters.tsx'
+import { ListSheet } from '../../../ui/list-sheet.tsx'
 import { SelectField } from '../../../ui/select-field.tsx'
-import { Area, Sheet } from '../../../ui/sheet.tsx'
 import { TextField } from '../../../ui/text-field.tsx'
 import { Tick } from '../../../ui/tick.tsx'
-import { useMedia } from '../../../ui/use-media.ts'
 import { useSheetTitle } from '../../shell/use-sheet-title.ts'
 import { RegisterPages } from './register-pages.tsx'
-import { SearchField } from './search-field.tsx'
 
 /** Transactions in and out: the first page of the register. */
 export function Component() {
   useSheetTitle(words.title)
   const list = useListState()
   const may = useMay('register.manage')
-  const wide = useMedia('(min-width: 601px)')
   const asked = transactionsAsked(list)
   return (
-    <Sheet recipe="list">
-      <Area>
-        <Cartouche title={words.title} source={words.source} />
-        <div className="pane stack gap-4">
-          <RegisterPages />
-          {may.allowed ? (
-            <div className="stack">
-              <ButtonLink kind="primary" block icon={ArrowDownToLine} to={paths.newAcquisition()}>
-                {words.newAcquisition}
-              </ButtonLink>
-              <ButtonLink block icon={ArrowUpFromLine} to={paths.newDisposition()}>
-                {words.newDisposition}
-              </ButtonLink>
-            </div>
-          ) : (
-            <p className="hint">{may.why}</p>
-          )}
-          <SearchField label={words.search} list={list} />
-          <details className="fold" open={wide}>
-            <summary>{words.filters}</summary>
-            <div className="stack gap-3">
-              <ChoiceField
-                label={words.way}
-                segments={[
-                  { value: 'both', label: words.both },
-                  { value: 'in', label: words.in },
-                  { value: 'out', label: words.out },
-                ]}
-                value={asked.way ?? 'both'}
-                onChange={(way) => list.set({ way: way === 'both' ? undefined : way })}
-              />
-              <SelectField
-                label={words.kind}
-                startsEmpty={false}
-                options={[
-                  { value: '', label: words.anyKind },
-                  ...kinds.map((value) => ({ value, label: transactionKindNames[value] })),
-                ]}
-                value={asked.kind ?? ''}
-                onChange={(event) => list.set({ kind: event.target.value })}
-              />
-              <div className="pair">
-                <TextField
-                  label={words.from}
-                  type="date"
-                  value={asked.from ?? ''}
-                  onChange={(event) => list.set({ since: event.target.value })}
-                />
-                <TextField
-                  label={words.until}
-                  type="date"
-                  value={asked.until ?? ''}
-                  onChange={(event) => list.set({ until: event.target.value })}
-                />
-              </div>
-              <SelectField
-                label={words.standing}
-                startsEmpty={false}
-                options={[
-                  { value: '', label: words.withVoided },
-                  { value: 'no', label: words.onlyStanding },
-                  { value: 'yes', label: words.onlyVoided },
-                ]}
-                value={asked.voided ?? ''}
-                onChange={(event) => list.set({ voided: event.target.value })}
-              />
-              <Tick
-                label={words.onlyOpen}
-                checked={asked.open === 'yes'}
-                onChange={(event) => list.set({ open: event.target.checked ? 'yes' : undefined })}
-              />
-            </div>
-          </details>
-          <p className="row row-wrap">
-            <a href={transactionsCsvAddress(asked, false)} download className="row">
-              <Icon of={Download} />
-              {words.csv}
-            </a>
-            <a href={transactionsCsvAddress(asked, true)} download className="row">
-              <Icon of={Download} />
-              {words.csvGuarded}
-            </a>
-          </p>
-        </div>
-      </Area>
-      <Area className="pane">
-        <TransactionsList list={list} />
-      </Area>
-    </Sheet>
+    <ListSheet
+      title={words.title}
+      source={words.source}
+      pages={<RegisterPages />}
+      primary={
+        may.allowed ? (
+          <>
+            <ButtonLink kind="primary" block icon={ArrowDownToLine} to={paths.newAcquisition()}>
+              {words.newAcquisition}
+            </ButtonLink>
+            <ButtonLink block icon={ArrowUpFromLine} to={paths.newDisposition()}>
+              {words.newDisposition}
+            </ButtonLink>
+          </>
+        ) : (
+          <p className="hint">{may.why}</p>
+        )
+      }
+      search={<SearchField label={words.search} list={list} />}
+      filters={
+        <Filters {...list.filters}>
+          <ChoiceField
+            label={words.way}
+            segments={[
+              { value: 'both', label: words.both },
+              { value: 'in', label: words.in },
+              { value: 'out', label: words.out },
+            ]}
+            value={asked.way ?? 'both'}
+            onChange={(way) => list.set({ way: way === 'both' ? undefined : way })}
+          />
+          <SelectField
+            label={words.kind}
+            startsEmpty={false}
+            options={[
+              { value: '', label: words.anyKind },
+              ...kinds.map((value) => ({ value, label: transactionKindNames[value] })),
+            ]}
+            value={asked.kind ?? ''}
+            onChange={(event) => list.set({ kind: event.target.value })}
+          />
+          <div className="pair">
+            <TextField
+              label={words.from}
+              type="date"
+              value={asked.from ?? ''}
+              onChange={(event) => list.set({ since: event.target.value })}
+            />
+            <TextField
+              label={words.until}
+              type="date"
+              value={asked.until ?? ''}
+              onChange={(event) => list.set({ until: event.target.value })}
+            />
+          </div>
+          <SelectField
+            label={words.standing}
+            startsEmpty={false}
+            options={[
+              { value: '', label: words.withVoided },
+              { value: 'no', label: words.onlyStanding },
+              { value: 'yes', label: words.onlyVoided },
+            ]}
+            value={asked.voided ?? ''}
+            onChange={(event) => list.set({ voided: event.target.value })}
+          />
+          <Tick
+            label={words.onlyOpen}
+            checked={asked.open === 'yes'}
+            onChange={(event) => list.set({ open: event.target.checked ? 'yes' : undefined })}
+          />
+        </Filters>
+      }
+      acts={
+        <>
+          <DownloadLink href={transactionsCsvAddress(asked, false)}>{words.csv}</DownloadLink>
+          <DownloadLink href={transactionsCsvAddress(asked, true)}>{words.csvGuarded}</DownloadLink>
+        </>
+      }
+    >
+      <TransactionsList list={list} />
+    </ListSheet>
   )
 }
