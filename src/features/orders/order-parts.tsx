@@ -89,6 +89,7 @@ export function OrderWater({
     {
       id: 'animal',
       heading: words.animal,
+      narrow: 'head',
       cell: (row) => (
         <>
           {row.commonName}
@@ -96,8 +97,13 @@ export function OrderWater({
         </>
       ),
     },
-    { id: 'count', heading: words.count, cell: (row) => row.countText },
-    { id: 'place', heading: words.place, cell: (row) => <span className="num">{row.enclosureCode}</span> },
+    { id: 'count', heading: words.count, narrow: 'short', cell: (row) => row.countText },
+    {
+      id: 'place',
+      heading: words.place,
+      narrow: 'short',
+      cell: (row) => <span className="num">{row.enclosureCode}</span>,
+    },
     {
       id: 'treated',
       heading: words.treated,
@@ -111,16 +117,14 @@ export function OrderWater({
         {words.joined({ bodies: water.bodies.join(', ') })}{' '}
         {valves.map((valve) => words.valve(valve)).join(', ')}
       </p>
-      <div className="cards-when-narrow">
-        <DataTable
-          label={words.animals}
-          columns={columns}
-          rows={water.animals}
-          rowKey={(row) => row.animalId}
-          density="close"
-          instead={water.animals.length === 0 ? <p className="t-2 py-2">{words.nobody}</p> : undefined}
-        />
-      </div>
+      <DataTable
+        label={words.animals}
+        columns={columns}
+        rows={water.animals}
+        rowKey={(row) => row.animalId}
+        density="close"
+        instead={water.animals.length === 0 ? <p className="t-2 py-2">{words.nobody}</p> : undefined}
+      />
     </section>
   )
 }

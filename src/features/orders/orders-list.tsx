@@ -27,28 +27,26 @@ export function ordersAsked(list: Pick<ListState, 'get' | 'cursor'>): OrdersAske
   }
 }
 
-/** Treatment orders; cards on a phone. */
+/** Treatment orders. */
 export function OrdersList({ list }: { list: ListState }) {
   const { zone } = useMe().facility
   const query = useQuery(ordersQuery(ordersAsked(list)))
   const now = new Date().toISOString()
   return (
-    <div className="cards-when-narrow">
-      <DataTable
-        label={words.title}
-        columns={columnsOf((at) => sayMoment(at, zone, now), now)}
-        rowKey={(row) => row.id}
-        density="roomy"
-        {...listProps({
-          query,
-          list,
-          zone,
-          what: words.title,
-          empty: { title: words.empty, body: words.emptyBody },
-          usualSort: { column: 'number', direction: 'desc' },
-        })}
-      />
-    </div>
+    <DataTable
+      label={words.title}
+      columns={columnsOf((at) => sayMoment(at, zone, now), now)}
+      rowKey={(row) => row.id}
+      density="roomy"
+      {...listProps({
+        query,
+        list,
+        zone,
+        what: words.title,
+        empty: { title: words.empty, body: words.emptyBody },
+        usualSort: { column: 'number', direction: 'desc' },
+      })}
+    />
   )
 }
 
@@ -69,7 +67,7 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
         </>
       ),
     },
-    { id: 'phase', heading: words.phase, cell: (row) => <PhaseTag phase={row.phase} /> },
+    { id: 'phase', heading: words.phase, narrow: 'head', cell: (row) => <PhaseTag phase={row.phase} /> },
     {
       id: 'enclosure',
       heading: words.enclosure,
