@@ -5,7 +5,7 @@ import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
-import type { OrderQueries } from '../orders/index.ts'
+import type { OpenOrder, OrderQueries } from '../orders/index.ts'
 import { readDosesOf, recordOf } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
 
@@ -13,14 +13,19 @@ type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
 
 const aheadHours = 24
 
-/** Doses that are due until an instant, late, or running now, in time order. */
+/**
+ * Doses that are due until an instant, late, or running now, in time order.
+ *
+ * @param known the open orders, where the caller has read them already
+ */
 export async function findDueDoses(
   parts: { dataSource: Db; queries: OrderQueries; now(): Date },
   query: QueryOf<typeof listDueDoses>,
+  known?: readonly OpenOrder[],
 ): Promise<DueDose[]> {
   const now = parts.now().toISOString()
   const until = query.until ?? addHours(now, aheadHours)
-  const orders = await parts.queries.open()
+  const orders = known ?? (await parts.queries.open())
   const ids = orders.map(({ row }) => row.id)
   const all = ids.length > 0 ? await readDosesOf(parts.dataSource, ids) : []
   const byOrder = new Map<string, DoseReadRow[]>()

@@ -3,7 +3,7 @@ import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
-import type { Orders } from '../orders/index.ts'
+import type { OpenOrder, Orders } from '../orders/index.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
 import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
@@ -39,6 +39,7 @@ export function createAdministrations(
   }
   const print = createSheetPrinter({ ...parts, documents: parts.documents.service, read })
   parts.documents.prints.answerFor(sheetPrintKind, orders.answerForPrint)
+  const due = { dataSource, queries: orders.queries, now }
   const queries: AdministrationsQueries = {
     async sheet(number, key, blind, actor) {
       return presentSheet({ ...(await read(number, key)), blind, actor, now: now().toISOString() })
@@ -48,10 +49,11 @@ export function createAdministrations(
       if (!found) throw new Problem('not-found')
       return queries.sheet(found.number, found.key, false, actor)
     },
-    due: (query) => findDueDoses({ dataSource, queries: orders.queries, now }, query),
+    due: (query) => findDueDoses(due, query),
   }
-  /** What the worklist asks besides the doses that are due. */
+  /** What the worklist asks. */
   const work = {
+    dueDoses: (until: string, orders: readonly OpenOrder[]) => findDueDoses(due, { until }, orders),
     recentDoses: (since: Date) => readRecentDoses(dataSource, since),
     wantedSeconds: (since: Date) => readWantedSeconds(dataSource, since),
   }

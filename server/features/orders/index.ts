@@ -33,7 +33,7 @@ export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
 export { orderNotice, signatureEntry } from './order-document.ts'
 export type { SignedOrder } from './order-content.ts'
-export type { OrderWork } from './order-work.ts'
+export type { OpenOrder, OrderWork } from './order-work.ts'
 export type { EventReadRow } from './orders.reads.ts'
 export type { BathFactsReader } from './bath-facts.ts'
 export const orderEntities = [OrderHead, OrderVersion, OrderVersionAnimal, OrderEventRow, AgentExperience]
@@ -90,7 +90,7 @@ export function createOrders(parts: OrdersOutside) {
     judge,
     print,
     course,
-    /** Orders with something to decide, for the worklist. */
+    /** Orders with something to decide, and the plans of the open ones, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString()),
     answerForPrint,
     routes: orderRoutes({ service, queries, situation, now, print }),

@@ -1,8 +1,10 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { readStandingHolds } from './order-work.reads.ts'
-import { presentOrderRow } from './orders.present.ts'
+import type { StandingHoldRow } from './order-work.reads.ts'
+import { presentOrderRow, signedZone } from './orders.present.ts'
 import { readOrders } from './orders.reads.ts'
+import type { OrderReadRow } from './orders.reads.ts'
 
 /** An order that waits for somebody. */
 export interface OrderWork {
@@ -14,9 +16,41 @@ export interface OrderWork {
   hold: { reason: string | null; at: string; by: string } | null
 }
 
-/** Orders with something to decide: drafts, proposals, held ones, and those whose doses nobody recorded in time. */
-export async function readOrderWork(db: Db, now: string): Promise<OrderWork[]> {
+/** Signed orders that were not discontinued, each with its plan of doses. */
+export function openOrders(rows: readonly OrderReadRow[], now: string) {
+  return rows.flatMap((row) => {
+    const shown = presentOrderRow(row, now)
+    const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
+    if (!isOpen || row.starts_at === null || row.doses === null) return []
+    const plan = {
+      startsAt: row.starts_at.toISOString(),
+      doses: row.doses,
+      intervalHours: row.interval_hours,
+      timed: row.contact_minutes !== null,
+      zone: signedZone(row),
+    }
+    return [{ row: shown, plan }]
+  })
+}
+export type OpenOrder = ReturnType<typeof openOrders>[number]
+
+/**
+ * What the worklist asks of orders, in one read: those with something to decide (drafts, proposals, held ones, those
+ * whose doses nobody recorded in time), and the plans of the open ones.
+ */
+export async function readOrderWork(
+  db: Db,
+  now: string,
+): Promise<{ waiting: OrderWork[]; open: OpenOrder[] }> {
   const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
+  return { waiting: waitingOrders(rows, holds, now), open: openOrders(rows, now) }
+}
+
+function waitingOrders(
+  rows: readonly OrderReadRow[],
+  holds: readonly StandingHoldRow[],
+  now: string,
+): OrderWork[] {
   return rows.flatMap((row): OrderWork[] => {
     const order = presentOrderRow(row, now)
     const waits = row.stage !== 'none' || order.phase === 'held' || order.phase === 'expired'

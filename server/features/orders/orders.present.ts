@@ -8,15 +8,30 @@ import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
-/** What the signature froze beside the content: the zone by whose clock the doses were planned. */
-export function signedZone(row: OrderReadRow): string {
-  if (row.signed_text === null) return 'UTC'
-  try {
-    return (JSON.parse(row.signed_text) as { signedBy?: { zone?: string } }).signedBy?.zone ?? 'UTC'
-  } catch {
-    return 'UTC'
-  }
+interface SignedText {
+  content?: SignedOrder
+  signedBy?: { zone?: string }
 }
+
+/** Signed texts are long, and a list asks each several things. */
+const readTexts = new WeakMap<OrderReadRow, SignedText | null>()
+
+/** The signed text of a row; null where there is none, or where it is no longer readable. */
+function signedText(row: OrderReadRow): SignedText | null {
+  const known = readTexts.get(row)
+  if (known !== undefined) return known
+  let text: SignedText | null = null
+  try {
+    text = row.signed_text === null ? null : (JSON.parse(row.signed_text) as SignedText)
+  } catch {
+    // altered in the database: the screens that show the signature say so
+  }
+  readTexts.set(row, text)
+  return text
+}
+
+/** What the signature froze beside the content: the zone by whose clock the doses were planned. */
+export const signedZone = (row: OrderReadRow): string => signedText(row)?.signedBy?.zone ?? 'UTC'
 
 /** The doses that the signed version in force plans; none for a draft. */
 export function plannedOf(row: OrderReadRow): PlannedDose[] {
@@ -45,14 +60,7 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
 }
 
 /** What the signature says, read for showing; columns beside the text are never shown in its place. */
-function signedContent(row: OrderReadRow): SignedOrder | null {
-  if (row.signed_text === null) return null
-  try {
-    return (JSON.parse(row.signed_text) as { content: SignedOrder }).content
-  } catch {
-    return null
-  }
-}
+const signedContent = (row: OrderReadRow): SignedOrder | null => signedText(row)?.content ?? null
 
 export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
   const standing = standingOfRow(row)

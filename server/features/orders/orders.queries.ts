@@ -11,6 +11,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
+import { openOrders } from './order-work.ts'
 import { plannedOf, presentOrderRow, signedZone } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
 
@@ -129,20 +130,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     /** Signed orders that are not ended, with their plan: what worklists ask. */
     async open() {
       const now = parts.now().toISOString()
-      const rows = await readOrders(parts.dataSource, {})
-      return rows.flatMap((row) => {
-        const shown = presentOrderRow(row, now)
-        const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
-        if (!isOpen || row.starts_at === null || row.doses === null) return []
-        const plan = {
-          startsAt: row.starts_at.toISOString(),
-          doses: row.doses,
-          intervalHours: row.interval_hours,
-          timed: row.contact_minutes !== null,
-          zone: signedZone(row),
-        }
-        return [{ row: shown, plan }]
-      })
+      return openOrders(await readOrders(parts.dataSource, {}), now)
     },
 
     /** Holds and ends of an order, the newest first. */

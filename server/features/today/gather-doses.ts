@@ -4,6 +4,7 @@ import { addDays } from '../../../shared/domain/time/facility-date.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { startOfFacilityDay } from '../../../shared/domain/time/local-time.ts'
 import type { Administrations, RecentDoseRow } from '../administrations/index.ts'
+import type { OpenOrder } from '../orders/index.ts'
 import { doseParams } from './dose-params.ts'
 import { atHour, waiting, work } from './work.ts'
 import type { Moment } from './work.ts'
@@ -20,11 +21,15 @@ export interface GatheredDoses {
 }
 
 /** Doses that are due, late or coming until the end of tomorrow; baths that go on; second calculations; exceptions. */
-export async function gatherDoses(administrations: Administrations, moment: Moment): Promise<GatheredDoses> {
+export async function gatherDoses(
+  administrations: Administrations,
+  open: readonly OpenOrder[],
+  moment: Moment,
+): Promise<GatheredDoses> {
   const until = startOfFacilityDay(addDays(moment.on, 2), moment.zone)
   const since = (hours: number) => new Date(addHours(moment.at, -hours))
   const [due, recent, seconds] = await Promise.all([
-    administrations.queries.due({ until }),
+    administrations.work.dueDoses(until, open),
     administrations.work.recentDoses(since(exceptionsShownHours)),
     administrations.work.wantedSeconds(since(secondsShownHours)),
   ])
@@ -59,7 +64,7 @@ export async function gatherDoses(administrations: Administrations, moment: Mome
   }
 }
 
-type Due = Awaited<ReturnType<Administrations['queries']['due']>>
+type Due = Awaited<ReturnType<Administrations['work']['dueDoses']>>
 
 /** Doses of one order that are late stand as one item, the first of them: the sheet shows them all. */
 function plannedItems(due: Due, moment: Moment): TodayWork[] {

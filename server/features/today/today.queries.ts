@@ -9,6 +9,7 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { TodayParts } from './index.ts'
 import { gatherDiscrepancies } from './gather-discrepancies.ts'
 import { gatherDoses } from './gather-doses.ts'
+import type { GatheredDoses } from './gather-doses.ts'
 import { gatherFlagged, gatherNotices } from './gather-observations.ts'
 import { gatherOrders } from './gather-orders.ts'
 import { gatherOwnLicence, gatherPeople } from './gather-people.ts'
@@ -27,6 +28,12 @@ const msPerDay = 86_400_000
 /** Asks only for what stands in some lane of the reader, everything at once. */
 export function createTodayQueries(parts: TodayParts) {
   const { clock, facility, quarantine, orders, administrations } = parts
+
+  async function gatherTanks(moment: Moment): Promise<GatheredDoses> {
+    const { waiting, open } = await orders.work()
+    const doses = await gatherDoses(administrations, open, moment)
+    return { ...doses, items: [...doses.items, ...gatherOrders(waiting, moment)] }
+  }
 
   async function gatherCases(moment: Moment): Promise<TodayWork[]> {
     const [board, looks] = await Promise.all([
@@ -58,10 +65,9 @@ export function createTodayQueries(parts: TodayParts) {
       const readsOrders = decide('order.read', actor.roles).allowed
       const seesTanks = seesLane('decide') || seesLane('doses') || seesLane('watch')
 
-      const [doses, orderWork, cases, notices, flagged, recent, water, register, discrepancies, people, own] =
+      const [tanks, cases, notices, flagged, recent, water, register, discrepancies, people, own] =
         await Promise.all([
-          readsOrders && seesTanks ? gatherDoses(administrations, moment) : { items: [], recent: [] },
-          readsOrders && seesTanks ? orders.work() : none,
+          readsOrders && seesTanks ? gatherTanks(moment) : { items: [], recent: [] },
           seesTanks ? gatherCases(moment) : none,
           sees('urgent-call') ? quarantine.observationQueries.notices(true) : none,
           sees('observation-flagged')
@@ -82,8 +88,7 @@ export function createTodayQueries(parts: TodayParts) {
         ])
 
       const items = [
-        ...doses.items,
-        ...gatherOrders(orderWork, moment),
+        ...tanks.items,
         ...cases,
         ...gatherNotices(notices, moment),
         ...gatherFlagged(flagged.rows, moment),
@@ -100,7 +105,7 @@ export function createTodayQueries(parts: TodayParts) {
           items.filter(({ kind }) => sees(kind)),
           zone,
         ),
-        log: todayLog(recent.rows, doses.recent, moment),
+        log: todayLog(recent.rows, tanks.recent, moment),
       }
     },
   }
