@@ -3,6 +3,7 @@ import { doseStates } from '../domain/orders/dose-states.ts'
 import { contract } from './contract.ts'
 import { OrderNumber } from './orders.contract.ts'
 import { EnteredQuantity, Instant, LocalDate, May, RecordId } from './primitives.ts'
+import { actAddresses } from './today.addresses.ts'
 
 const DoseKey = z
   .string()
@@ -253,9 +254,7 @@ export const recordDose = contract({
 })
 
 export const stopBath = contract({
-  id: 'stopBath',
-  method: 'post',
-  path: '/doses/:doseId/stop',
+  ...actAddresses.stopBath,
   action: 'bath.stop',
   summary: 'End a bath, at its time or at once; never refused',
   params: z.strictObject({ doseId: RecordId }),
@@ -268,7 +267,6 @@ export const stopBath = contract({
   }),
   reply: { 201: BathSheet },
   problems: ['not-found', 'id-already-used', 'in-the-future'],
-  idempotent: 'by-record-id',
 })
 
 export const listDueDoses = contract({

@@ -5,6 +5,8 @@ import { todayAddresses } from './today.addresses.ts'
 /** What can be found, in the order in which it is shown. */
 export const foundKinds = ['animal', 'enclosure', 'order', 'case', 'transaction', 'permit', 'person'] as const
 
+export type FoundKind = (typeof foundKinds)[number]
+
 export const FoundThing = z.object({
   key: z.string().describe('What its address is made of: number, code or id'),
   name: z.string().describe('Number or code and name'),

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
 import { Instant, RecordId } from './primitives.ts'
+import { actAddresses } from './today.addresses.ts'
 
 export const NoticeState = z
   .enum(['sending', 'not-sent', 'sent', 'seen'])
@@ -88,16 +89,13 @@ export const listNotices = contract({
 })
 
 export const noteSeen = contract({
-  id: 'noteSeen',
-  method: 'post',
-  path: '/notices/:id/seen',
+  ...actAddresses.noteSeen,
   action: 'observation.flag',
   summary: 'I have seen this urgent call and see to it',
   params,
   body: z.strictObject({ id: RecordId }),
   reply: { 201: Notice },
   problems: ['not-found', 'id-already-used'],
-  idempotent: 'by-record-id',
 })
 
 export const noteTelephoned = contract({

@@ -5,6 +5,7 @@ import { contract } from './contract.ts'
 import { NoticeState } from './notices.contract.ts'
 import { Instant, LocalDate, Reason, RecordId } from './primitives.ts'
 import { CaseNumber } from './quarantine-primitives.ts'
+import { actAddresses } from './today.addresses.ts'
 
 const HowMany = z.int().min(0).max(10_000_000)
 const CountSaid = z
@@ -117,9 +118,7 @@ export const listObservations = contract({
 })
 
 export const reviewObservation = contract({
-  id: 'reviewObservation',
-  method: 'post',
-  path: '/observations/:id/reviews',
+  ...actAddresses.reviewObservation,
   action: 'chart.write',
   summary: 'A veterinarian has read what was marked for them',
   params: z.strictObject({ id: RecordId }),
@@ -129,7 +128,6 @@ export const reviewObservation = contract({
   }),
   reply: { 201: Observation },
   problems: ['not-found', 'id-already-used'],
-  idempotent: 'by-record-id',
 })
 
 export const voidObservation = contract({

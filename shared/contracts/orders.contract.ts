@@ -4,6 +4,7 @@ import { concentrationBases } from '../domain/units/basis.ts'
 import { contract } from './contract.ts'
 import { EnteredQuantity, Instant, listQuery, May, page, Reason, RecordId, Version } from './primitives.ts'
 import { SignatureBlock } from './signing.contract.ts'
+import { actAddresses } from './today.addresses.ts'
 
 export const OrderNumber = z
   .string()
@@ -349,16 +350,13 @@ export const holdOrder = contract({
 })
 
 export const liftOrderHold = contract({
-  id: 'liftOrderHold',
-  method: 'post',
-  path: '/orders/:number/hold-lift',
+  ...actAddresses.liftOrderHold,
   action: 'hold.lift',
   summary: 'Lift the hold of an order; for a veterinarian',
   params: orderParams,
   body: z.strictObject({ reason: Reason }),
   reply: { 200: Order },
   problems: ['not-found', 'not-held'],
-  idempotent: 'by-key',
 })
 
 export const discontinueOrder = contract({

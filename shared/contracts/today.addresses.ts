@@ -3,3 +3,21 @@ export const todayAddresses = {
   getToday: { id: 'getToday', method: 'get', path: '/today' },
   find: { id: 'find', method: 'get', path: '/find' },
 } as const
+
+/** Addresses of what can be done on Today itself; the contracts take them from here. */
+export const actAddresses = {
+  noteSeen: { id: 'noteSeen', method: 'post', path: '/notices/:id/seen', idempotent: 'by-record-id' },
+  reviewObservation: {
+    id: 'reviewObservation',
+    method: 'post',
+    path: '/observations/:id/reviews',
+    idempotent: 'by-record-id',
+  },
+  liftOrderHold: {
+    id: 'liftOrderHold',
+    method: 'post',
+    path: '/orders/:number/hold-lift',
+    idempotent: 'by-key',
+  },
+  stopBath: { id: 'stopBath', method: 'post', path: '/doses/:doseId/stop', idempotent: 'by-record-id' },
+} as const

@@ -39,7 +39,6 @@ export const frameWords = defineMessages({
   notHereYetTitle: (p: { sheet: string }) => `${p.sheet} is not in this version`,
   notHereYetBody:
     'This sheet has not been built yet, so nothing can be read or entered here. Nothing was lost. It will open at this place when it is there.',
-  notHereYetFind: 'Finding is not in this version. Open a sheet and look there.',
   toToday: 'Go to Today',
 
   nothingHere: 'Nothing at this address',

@@ -1,9 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query'
-import { createBrowserRouter, redirect } from 'react-router-dom'
+import { createBrowserRouter } from 'react-router-dom'
 import type { RouteObject } from 'react-router-dom'
-import { paths } from '../lib/paths.ts'
 import { RouteError } from './error-boundary.tsx'
-import { landed } from './landed-sheets.ts'
 import { redirectSignedIn, requireSignIn } from './require-sign-in.ts'
 
 /** The page of parts is for building with; it is in no production bundle. */
@@ -21,9 +19,7 @@ const partsRoutes: RouteObject[] = withParts
  * feature is in this version, and is then named in landed-sheets.ts too.
  */
 const sheetRoutes: RouteObject[] = [
-  ...(landed.has('today')
-    ? []
-    : [{ index: true, loader: () => redirect(paths.notInThisVersion('today')) } satisfies RouteObject]),
+  { index: true, lazy: () => import('./routes/today.tsx') },
   { path: 'not-in-this-version/:sheet', lazy: () => import('./routes/not-in-this-version.tsx') },
   { path: 'water', lazy: () => import('./routes/water.tsx') },
   { path: 'water/map', lazy: () => import('./routes/water-map.tsx') },

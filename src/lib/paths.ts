@@ -25,12 +25,14 @@ export const paths = {
   quarantine: () => '/quarantine',
   quarantineCase: (number: string) => `/quarantine/${part(number)}`,
   rounds: () => '/rounds',
+  observe: (enclosure: string) => `/enclosures/${part(enclosure)}/observe`,
 
   orders: () => '/orders',
   newOrder: () => '/orders/new',
   order: (number: string) => `/orders/${part(number)}`,
   editOrder: (number: string) => `/orders/${part(number)}/edit`,
-  orderSheet: (number: string) => `/orders/${part(number)}/sheet`,
+  orderSheet: (number: string, dose?: string) =>
+    `/orders/${part(number)}/sheet${dose === undefined ? '' : `?dose=${part(dose)}`}`,
 
   pharmacy: () => '/pharmacy',
   formulary: () => '/pharmacy/formulary',

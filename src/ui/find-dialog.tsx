@@ -7,37 +7,28 @@ import { TextField } from './text-field.tsx'
 /**
  * The frame of finding: one field, and under it what was found. What is found comes from outside, as links.
  *
- * @param children called with the text once it has 2 letters; absent while nothing can be searched
+ * @param children called with the text once it has 2 letters
  */
 export function FindDialog({
   onBack,
   children,
-  unavailable,
 }: {
   onBack: () => void
-  children?: (typed: string) => ReactNode
-  /** Says why nothing can be found in this version. */
-  unavailable?: string
+  children: (typed: string) => ReactNode
 }) {
   const [typed, setTyped] = useState('')
   return (
     <Dialog question={partWords.find} onBack={onBack} wide>
-      {unavailable ? (
-        <p>{unavailable}</p>
-      ) : (
-        <>
-          <TextField
-            label={partWords.findLabel}
-            hint={partWords.findHint}
-            type="search"
-            autoComplete="off"
-            data-first-focus
-            value={typed}
-            onChange={(event) => setTyped(event.target.value)}
-          />
-          {typed.trim().length >= 2 ? <div className="find-results">{children?.(typed.trim())}</div> : null}
-        </>
-      )}
+      <TextField
+        label={partWords.findLabel}
+        hint={partWords.findHint}
+        type="search"
+        autoComplete="off"
+        data-first-focus
+        value={typed}
+        onChange={(event) => setTyped(event.target.value)}
+      />
+      {typed.trim().length >= 2 ? <div className="find-results">{children(typed.trim())}</div> : null}
     </Dialog>
   )
 }

@@ -12,7 +12,7 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
 import { openOrders } from './order-work.ts'
-import { plannedOf, presentOrderRow, signedZone } from './orders.present.ts'
+import { plannedOf, presentOrderRow } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
 
 export interface OrderQueriesParts {

@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from 'react'
+import { lazy, Suspense, useEffect, useRef, useState } from 'react'
 import { Anchor } from 'lucide-react'
 import { Navigate, Outlet, useLocation, useNavigate } from 'react-router-dom'
 import { frameWords } from '../../../shared/messages/frame.ts'
@@ -20,6 +20,11 @@ import { WithMe } from '../with-me.tsx'
 import { Bridge } from './bridge.tsx'
 import { useDueToday } from './due-today.ts'
 import { useQuantityTools } from './use-quantity-tools.ts'
+
+/** What finds are drawn with comes when somebody looks for something. */
+const FindResults = lazy(async () => ({
+  default: (await import('../../features/find/index.ts')).FindResults,
+}))
 
 /** The frame around every sheet. */
 export function Component() {
@@ -75,7 +80,13 @@ function SignedInFrame() {
           </QuantityToolsContext>
         </div>
         {front === 'find' ? (
-          <FindDialog onBack={() => setFront(null)} unavailable={frameWords.notHereYetFind} />
+          <FindDialog onBack={() => setFront(null)}>
+            {(typed) => (
+              <Suspense>
+                <FindResults text={typed} onGo={() => setFront(null)} />
+              </Suspense>
+            )}
+          </FindDialog>
         ) : null}
         {front === 'keys' ? <KeyListDialog onBack={() => setFront(null)} /> : null}
       </HoursAboveContext>

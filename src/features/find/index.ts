@@ -1,0 +1,1 @@
+export { FindResults } from './find-results.tsx'

@@ -1,0 +1,2 @@
+export { dueItemsOf } from './due-items.ts'
+export { TodaySheet } from './today-sheet.tsx'

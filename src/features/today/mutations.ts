@@ -1,0 +1,67 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query'
+import type { stopBath } from '../../../shared/contracts/doses.contract.ts'
+import type { noteSeen } from '../../../shared/contracts/notices.contract.ts'
+import type { reviewObservation } from '../../../shared/contracts/observations.contract.ts'
+import type { liftOrderHold } from '../../../shared/contracts/orders.contract.ts'
+import { actAddresses } from '../../../shared/contracts/today.addresses.ts'
+import { api } from '../../lib/api-client.ts'
+
+/** What was done here may stand on any other sheet too, so everything read is looked up again where it is shown. */
+function useRefresh() {
+  const client = useQueryClient()
+  return () => client.invalidateQueries()
+}
+
+export function useMarkSeen() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { noticeId: string; id: string }) =>
+      api<typeof noteSeen>(actAddresses.noteSeen, {
+        params: { id: given.noticeId },
+        body: { id: given.id },
+      }),
+    onSuccess,
+  })
+}
+
+export function useMarkRead() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { observationId: string; id: string }) =>
+      api<typeof reviewObservation>(actAddresses.reviewObservation, {
+        params: { id: given.observationId },
+        body: { id: given.id },
+      }),
+    onSuccess,
+  })
+}
+
+export function useLiftOrder() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { number: string; reason: string; key: string }) =>
+      api<typeof liftOrderHold>(actAddresses.liftOrderHold, {
+        params: { number: given.number },
+        body: { reason: given.reason },
+        key: given.key,
+      }),
+    onSuccess,
+  })
+}
+
+export function useStopBath() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { doseId: string; id: string; happenedAt: string; seen: string }) =>
+      api<typeof stopBath>(actAddresses.stopBath, {
+        params: { doseId: given.doseId },
+        body: {
+          id: given.id,
+          cause: 'stopped',
+          happenedAt: given.happenedAt,
+          ...(given.seen === '' ? {} : { seen: given.seen }),
+        },
+      }),
+    onSuccess,
+  })
+}
