@@ -65,7 +65,7 @@ describe('doses on the worklist', () => {
     return draft.number
   }
 
-  it('come, are due from their hour and late after their window, for who gives them and nobody else', async () => {
+  it('come, and are due from their hour, for who gives them and nobody else; past the last window the order is late', async () => {
     const number = await aSigned()
     const state = async () => (await worklist.itemsOf('technician', 'dose', number)).map((item) => item.state)
     expect(await state()).toEqual(['coming'])
@@ -79,7 +79,12 @@ describe('doses on the worklist', () => {
       params: { number, key: '1', enclosure: 'QT-3', amount: '218\u00a0mL' },
     })
     api.clock.set(new Date('2026-12-02T01:00:01Z'))
-    expect(await state()).toEqual(['late'])
+    expect(await state()).toEqual([])
+    expect((await worklist.itemsOf('technician', 'order-not-carried-out', number))[0]).toMatchObject({
+      state: 'late',
+      latestAt: '2026-12-02T01:00:00.000Z',
+      params: { given: 0, doses: 1 },
+    })
     // After its only window the order has not been carried out, and whoever knows what happened may say so
     expect(await worklist.rolesThatSee('order-not-carried-out', number)).toEqual([
       'veterinarian',

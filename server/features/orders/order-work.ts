@@ -1,4 +1,5 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
@@ -14,6 +15,8 @@ export interface OrderWork {
   createdAt: string
   createdBy: string
   hold: { reason: string | null; at: string; by: string } | null
+  /** End of the window of the last planned dose; null while nothing is signed. */
+  lastWindowUntil: string | null
 }
 
 /** Signed orders that were not discontinued, each with its plan of doses. */
@@ -43,13 +46,15 @@ export async function readOrderWork(
   now: string,
 ): Promise<{ waiting: OrderWork[]; open: OpenOrder[] }> {
   const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
-  return { waiting: waitingOrders(rows, holds, now), open: openOrders(rows, now) }
+  const open = openOrders(rows, now)
+  return { waiting: waitingOrders(rows, holds, now, open), open }
 }
 
 function waitingOrders(
   rows: readonly OrderReadRow[],
   holds: readonly StandingHoldRow[],
   now: string,
+  open: readonly OpenOrder[],
 ): OrderWork[] {
   return rows.flatMap((row): OrderWork[] => {
     const order = presentOrderRow(row, now)
@@ -65,7 +70,12 @@ function waitingOrders(
         hold: hold
           ? { reason: hold.reason, at: hold.happened_at.toISOString(), by: hold.by_name ?? '' }
           : null,
+        lastWindowUntil: lastWindowOf(open.find((one) => one.row.id === row.id)),
       },
     ]
   })
+}
+
+function lastWindowOf(order: OpenOrder | undefined): string | null {
+  return order ? (plannedDoses(order.plan, order.plan.zone).at(-1)?.closesAt ?? null) : null
 }

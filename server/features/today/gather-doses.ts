@@ -38,11 +38,14 @@ export async function gatherDoses(
   // Whoever may calculate a second time is shown no amount beforehand
   const isBlind = (row: { number: string; key: string }) =>
     blind.some((one) => one.number === row.number && one.dose_key === row.key)
+  // Nothing is given under an order past its last window; it stands on the list as a whole
+  const hasExpired = (number: string) =>
+    open.some(({ row }) => row.number === number && row.phase === 'expired')
   return {
     recent,
     items: [
       ...plannedItems(
-        due.filter((row) => !isBlind(row)),
+        due.filter((row) => !isBlind(row) && !hasExpired(row.number)),
         moment,
       ),
       ...recent.flatMap((row) => recordedItems(row, moment, mayStop)),

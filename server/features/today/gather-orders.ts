@@ -1,13 +1,13 @@
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { OrderWork } from '../orders/index.ts'
-import { waiting } from './work.ts'
+import { waiting, work } from './work.ts'
 import type { Moment } from './work.ts'
 
 /** Orders that wait for a veterinarian, and those whose last window closed with doses unaccounted for. */
 export function gatherOrders(orders: readonly OrderWork[], moment: Moment): TodayWork[] {
   const mayLift = decide('hold.lift', moment.actor.roles).allowed
-  return orders.flatMap(({ order, stage, createdAt, createdBy, hold }): TodayWork[] => {
+  return orders.flatMap(({ order, stage, createdAt, createdBy, hold, lastWindowUntil }): TodayWork[] => {
     const items: TodayWork[] = []
     const params = {
       number: order.number,
@@ -37,11 +37,13 @@ export function gatherOrders(orders: readonly OrderWork[], moment: Moment): Toda
           acts: mayLift ? ['lift-order'] : [],
         }),
       )
-    if (order.phase === 'expired')
+    if (order.phase === 'expired' && lastWindowUntil !== null)
       items.push(
-        waiting({
+        work({
           id: `order-not-carried-out:${order.number}`,
           kind: 'order-not-carried-out',
+          state: 'late',
+          latestAt: lastWindowUntil,
           params: { ...params, given: order.dosesGiven, doses: order.doses ?? 0 },
         }),
       )

@@ -15,7 +15,8 @@ import { StopBathDialog } from './stop-bath-dialog.tsx'
 /** What can be done with a piece of work where it stands, and the way to where it is done. */
 export function TodayActs({ item, title }: { item: TodayWork; title: string }) {
   if (item.state === 'coming' || item.state === 'done') return null
-  const go = goWords[item.kind]
+  // a held dose is not to be prepared
+  const go = item.kind === 'dose' && item.state === 'waiting' ? '' : goWords[item.kind]
   if (go === '' && item.acts.length === 0) return null
   return (
     <div className="today-acts">

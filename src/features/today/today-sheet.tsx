@@ -19,7 +19,7 @@ import { TodayBands } from './today-bands.tsx'
 import { TodayDone } from './today-done.tsx'
 import { TodayLog } from './today-log.tsx'
 import { UrgentCalls } from './urgent-calls.tsx'
-import { viewToday } from './today-model.ts'
+import { lanesSeenBy, viewToday } from './today-model.ts'
 import type { TodayView } from './today-model.ts'
 
 /** What is late, due, waiting and coming for the roles of the person, in lanes by the hour; done from here. */
@@ -29,10 +29,12 @@ export function TodaySheet() {
   const preferred = usePreference('todayLane')
   const { zone } = me.facility
   const reply = query.data
+  // the log is of the tanks, and for whoever works there
+  const atTheTanks = lanesSeenBy(me.roles).includes('watch')
   const view = reply && viewToday(reply.items, { at: reply.at, zone, roles: me.roles, preferred })
 
   return (
-    <Sheet recipe="list-log" className="today">
+    <Sheet recipe={atTheTanks ? 'list-log' : 'plain'} className="today">
       <Area>
         <div className="sheet-head today-head">
           <Cartouche
@@ -68,7 +70,7 @@ export function TodaySheet() {
           </>
         ) : null}
       </Area>
-      <ShipsLog reply={reply} zone={zone} />
+      {atTheTanks ? <ShipsLog reply={reply} zone={zone} /> : null}
     </Sheet>
   )
 }
