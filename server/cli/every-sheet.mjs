@@ -20,6 +20,9 @@ export const everySheet = [
   },
   { name: 'enclosure-volume', as: 'tech', address: '/enclosures/:code/volume', list: '/api/enclosures' },
   { name: 'enclosure-volumes', as: 'tech', address: '/enclosures/:code/volumes', list: '/api/enclosures' },
+  { name: 'quarantine', as: 'vet', address: '/quarantine' },
+  { name: 'quarantine-table', as: 'keeper', address: '/quarantine?rows=table' },
+  { name: 'case', as: 'vet', address: '/quarantine/:number', list: '/api/cases' },
   { name: 'animals', as: 'keeper', address: '/animals' },
   {
     name: 'animal',

@@ -87,6 +87,8 @@ export const CaseRow = z.object({
   held: z.boolean().describe('A hold stands; only a veterinarian lifts it'),
   enclosures: z.array(z.string()).describe('Codes of the enclosures that the batch is in'),
   areas: z.array(z.string()).describe('Parts of the house, in the order of work'),
+  boundaries: z.array(z.string()).describe('Quarantine boundaries that the batch is within'),
+  protocolCode: z.string().describe('Code of the protocol in force'),
   animals: Animals,
   members: z.int().describe('Animals and groups of the batch with an accession number of their own'),
   day0On: LocalDate.nullable().describe('Day 0; null while the batch is open'),

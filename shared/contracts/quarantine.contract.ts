@@ -141,6 +141,8 @@ export const listCases = contract({
   summary: 'Quarantine cases with their clocks, for the board; running ones unless told',
   query: listQuery(['clearance', 'number', 'work']).extend({
     view: z.enum(boardViews).optional().describe('Which cases; running unless told'),
+    protocol: z.string().max(60).optional().describe('Only cases under the protocol with this code'),
+    boundary: z.string().max(200).optional().describe('Only cases within this quarantine boundary'),
     asOf: Instant.optional().describe('As of an instant; now unless told'),
   }),
   reply: {
@@ -160,6 +162,8 @@ export const listCases = contract({
         })
         .describe('How many cases each view holds'),
       asOfOn: LocalDate.describe('Day of the facility that the clocks were asked for'),
+      protocols: z.array(z.string()).describe('Codes of the protocols that cases were ever under'),
+      boundaries: z.array(z.string()).describe('Quarantine boundaries that cases are within now'),
       names: CaseNames,
     }),
   },

@@ -5,6 +5,7 @@ export const passageWords = defineMessages({
   dayOf: (p: { day: number; length: number }) => `Day ${p.day} of ${p.length}`,
   of: (p: { length: number }) => `of ${p.length}`,
   held: 'held',
+  notBegun: 'batch still open',
   stepDone: 'step done',
   due: 'due today',
   toCome: 'to come',

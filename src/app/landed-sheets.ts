@@ -6,6 +6,7 @@ import type { SheetName } from './sheet-names.ts'
  */
 export const landed: ReadonlySet<SheetName> = new Set<SheetName>([
   'today',
+  'quarantine',
   'water',
   'animals',
   'orders',

@@ -24,8 +24,12 @@ export const paths = {
 
   quarantine: () => '/quarantine',
   quarantineCase: (number: string) => `/quarantine/${part(number)}`,
+  newCase: () => '/quarantine/new',
+  clearCase: (number: string) => `/quarantine/${part(number)}/clearance`,
   rounds: () => '/rounds',
   observe: (enclosure: string) => `/enclosures/${part(enclosure)}/observe`,
+  urgentCall: (id: string) => `/urgent/${part(id)}`,
+  unsent: () => '/unsent',
 
   orders: () => '/orders',
   newOrder: () => '/orders/new',

@@ -235,6 +235,7 @@ export interface PlaceReadRow {
   id: string
   code: string
   area: string
+  boundary: string | null
   water_body_id: string | null
   air_space: string | null
 }
@@ -242,7 +243,7 @@ export interface PlaceReadRow {
 /** Every enclosure there ever was, with its water and its air. */
 export function readPlaces(db: Db): Promise<PlaceReadRow[]> {
   return db.query(
-    `SELECT e.id, e.code, e.area, w.id AS water_body_id, e.air_space
+    `SELECT e.id, e.code, e.area, e.boundary, w.id AS water_body_id, e.air_space
        FROM enclosures e LEFT JOIN water_bodies w ON w.enclosure_id = e.id`,
   )
 }

@@ -7,7 +7,7 @@ import { presentLegs } from './case-steps.ts'
 import type { CaseWork } from './case-steps.ts'
 import { countAt } from './clock-events.ts'
 import { presentReason } from './present-reason.ts'
-import { protocolContentOf } from './protocol-in-force.ts'
+import { protocolContentOf, protocolInForce } from './protocol-in-force.ts'
 import type { ClockFacts } from './read-clocks.ts'
 
 /** Animals of the batch whose ledgers are estimates, with the range known of each. */
@@ -81,6 +81,8 @@ export function presentCaseRow(
     held: standing.some(({ cause }) => cause === 'held'),
     enclosures: [...new Set(places.map(({ code }) => code))].sort(),
     areas: [...new Set(places.map(({ area }) => area))].sort(),
+    boundaries: [...new Set(places.flatMap(({ boundary }) => boundary ?? []))].sort(),
+    protocolCode: protocolInForce(facts, head).code,
     animals: animalsNow(facts, batch, estimates),
     members: batch.length,
     day0On: clock.day0On,

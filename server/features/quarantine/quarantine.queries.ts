@@ -80,7 +80,13 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const estimates = await estimatesOf(facts, heads)
       const all = heads.map((head) => presentCaseRow(facts, head, work, estimates))
       const word = query.q?.toLowerCase()
-      const found = all.filter((row) => isInView(row, view) && (!word || wordsOf(row).includes(word)))
+      const found = all.filter(
+        (row) =>
+          isInView(row, view) &&
+          (!word || wordsOf(row).includes(word)) &&
+          (!query.protocol || row.protocolCode === query.protocol) &&
+          (!query.boundary || row.boundaries.includes(query.boundary)),
+      )
       const sorted = sortBoard(found, query.sort ?? 'clearance', query.direction ?? 'asc')
       const page = pageOf(query)
       const rows = sorted.slice(page.offset, page.offset + page.limit)
@@ -90,6 +96,8 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
         nextCursor: nextCursorOf(page, sorted.length),
         tally: tallyOf(all),
         asOfOn: facilityDateOf(asOf.toISOString(), facts.zone),
+        protocols: [...new Set(all.map((row) => row.protocolCode))].sort(),
+        boundaries: [...new Set(all.flatMap((row) => row.boundaries))].sort(),
         names: presentNames(facts, heads),
       }
     },

@@ -1,3 +1,6 @@
 export { OrdersList, ordersAsked } from './orders-list.tsx'
 export { orderTitle, SignedOrder, UnsignedOrder } from './order-view.tsx'
-export { orderQuery, ordersCsvAddress, ordersKey } from './queries.ts'
+export { orderQuery, ordersCsvAddress, ordersKey, ordersQuery } from './queries.ts'
+export { OrderSignature } from './signature-state.tsx'
+export { PhaseTag } from './phase-tag.tsx'
+export { DoseText } from './dose-text.tsx'

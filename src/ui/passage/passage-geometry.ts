@@ -141,7 +141,10 @@ function layTexts(
 ): CourseText[] {
   const texts: CourseText[] = []
   const harbour = view.harbour && !view.held ? scale.x(view.harbour.on) : Infinity
-  const land: Box = { x1: harbour + 16, x2: harbour + 110, y1: y - 14, y2: y + 16 }
+  const nearEdge = harbour + (size === 'close' ? 125 : 82) > scale.width
+  const land: Box = nearEdge
+    ? { x1: harbour - 110, x2: harbour + 10, y1: y - 20, y2: y - 6 }
+    : { x1: harbour + 16, x2: harbour + 110, y1: y - 14, y2: y + 16 }
   const rise = size === 'close' ? 9 : 11
   const place = (text: CourseText) => {
     const box = textBox(text)
@@ -151,7 +154,7 @@ function layTexts(
   for (const mark of marks) {
     const late = mark.fixes[0]?.late
     if (mark.state !== 'overdue' || !late) continue
-    const words = `${mark.fixes[0]?.name}, ${late}`
+    const words = `${mark.fixes[0]?.short ?? mark.fixes[0]?.name}, ${late}`
     const left = mark.x - 12 - words.length * letterPx < 0
     place({
       x: left ? 2 : mark.x - 12,

@@ -45,7 +45,11 @@ export function passageSummary(view: PassageView): string {
       .join(', ')
   return [
     `${view.number} ${view.name}`,
-    view.day === null ? passageWords.held : passageWords.dayOf({ day: view.day, length: view.lengthDays }),
+    view.day === null
+      ? view.held
+        ? passageWords.held
+        : passageWords.notBegun
+      : passageWords.dayOf({ day: view.day, length: view.lengthDays }),
     listed('overdue'),
     listed('due'),
     view.held ?? (view.harbour ? `${passageWords.earliestClearance} ${shortDay(view.harbour.on)}` : ''),

@@ -1,0 +1,129 @@
+import type { ReactNode } from 'react'
+import { useQuery } from '@tanstack/react-query'
+import { Link } from 'react-router-dom'
+import type { Observation } from '../../../shared/contracts/observations.contract.ts'
+import { daysBetween, wallClockOf } from '../../../shared/domain/time/facility-date.ts'
+import { noticeStateWords } from '../../../shared/messages/notices.ts'
+import { sayObservation } from '../../../shared/messages/observations.ts'
+import { quarantineWords as words } from '../../../shared/messages/quarantine-screens.ts'
+import { sayTime } from '../../../shared/messages/say-date.ts'
+import { useFacilityNow } from '../../lib/facility-time.ts'
+import { useMay } from '../../lib/may.ts'
+import { useMe } from '../../lib/me.ts'
+import { paths } from '../../lib/paths.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
+import { Button } from '../../ui/button.tsx'
+import { longDay } from '../../ui/day-words.ts'
+import { LogColumn } from '../../ui/log-column.tsx'
+import type { LogEntry } from '../../ui/log-column.tsx'
+import { Tag } from '../../ui/tag.tsx'
+import { useReviewObservation } from './mutations.ts'
+import { observationsQuery } from './queries.ts'
+
+const shownAtMost = 60
+
+/** What was seen, the newest first: of one case, or of all with their numbers. A veterinarian notes here that they read it. */
+export function ObservationLog({
+  number,
+  day0On = null,
+  foot,
+}: {
+  number?: string
+  /** Day 0 of the case, for its day numbers. */
+  day0On?: string | null
+  foot?: ReactNode
+}) {
+  const { zone } = useMe().facility
+  const { date: today } = useFacilityNow(zone)
+  const { data } = useQuery(observationsQuery(number, shownAtMost))
+  const rows = data?.rows ?? []
+  let day = ''
+  const entries = rows.map((row): LogEntry => {
+    const { date, time } = wallClockOf(row.happenedAt, zone)
+    const name = date === today ? words.today : longDay(date)
+    const heading =
+      day0On !== null && date >= day0On
+        ? words.dayOfCase({ date: name, day: daysBetween(day0On, date) })
+        : name
+    const entry: LogEntry = {
+      key: row.id,
+      ...(date === day ? {} : { day: heading }),
+      time: time.slice(0, 5),
+      instant: row.happenedAt,
+      what: <ObservationWords row={row} numbered={number === undefined} zone={zone} />,
+      who: row.recordedBy,
+    }
+    day = date
+    return entry
+  })
+  return (
+    <LogColumn
+      title={words.log}
+      about={number ?? words.logAllCases}
+      entries={entries}
+      head={data && rows.length === 0 ? <p className="t-2 pt-3">{words.logNone}</p> : undefined}
+      foot={foot}
+    />
+  )
+}
+
+function ObservationWords({ row, numbered, zone }: { row: Observation; numbered: boolean; zone: string }) {
+  const now = new Date().toISOString()
+  const may = useMay('chart.write')
+  const review = useReviewObservation()
+  const said = `${sayObservation(row).join('. ')}.`
+  return (
+    <>
+      {numbered ? (
+        <>
+          {row.cases.map((one) => (
+            <Link key={one} to={paths.quarantineCase(one)} className="t-strong">
+              {one}
+            </Link>
+          ))}
+          {row.cases.length === 0 ? <b className="t-strong">{row.enclosure}</b> : null}{' '}
+        </>
+      ) : null}
+      {row.voidedReason === null ? (
+        said
+      ) : (
+        <>
+          <s>{said}</s> {words.struck({ reason: row.voidedReason })}
+        </>
+      )}
+      {row.origin === 'outbox' ? (
+        <span className="t-note block">
+          {row.timeDoubtful ? words.clockDoubtful : words.keptFirst({ at: sayTime(row.recordedAt, zone) })}
+        </span>
+      ) : null}
+      {row.notice ? (
+        <span className="block pt-1">
+          <Tag kind="solid">{words.urgent}</Tag>{' '}
+          <Link className="inline-block min-h-6" to={paths.urgentCall(row.notice.id)}>
+            {noticeStateWords[row.notice.state]}
+          </Link>
+        </span>
+      ) : null}
+      {row.forVeterinarian ? (
+        <span className="block pt-1">
+          <Tag>{words.forVeterinarian}</Tag>
+        </span>
+      ) : null}
+      {row.reviewed ? (
+        <span className="t-note block">
+          {words.readBy({ name: row.reviewed.by, at: sayMoment(row.reviewed.at, zone, now) })}
+          {row.reviewed.words ? words.readWith({ words: row.reviewed.words }) : null}
+        </span>
+      ) : row.forVeterinarian && row.voidedReason === null && may.allowed ? (
+        <Button
+          size="small"
+          className="mt-1"
+          disabled={review.isPending}
+          onClick={() => review.mutate(row.id)}
+        >
+          {words.haveRead}
+        </Button>
+      ) : null}
+    </>
+  )
+}
