@@ -6,6 +6,10 @@
  * @type {readonly Sheet[]}
  */
 export const everySheet = [
+  { name: 'today', as: 'vet', address: '/' },
+  { name: 'today-keeper', as: 'keeper', address: '/' },
+  { name: 'today-registrar', as: 'registrar', address: '/' },
+  { name: 'today-admin', as: 'admin', address: '/' },
   { name: 'water', as: 'tech', address: '/water' },
   { name: 'water-map', as: 'tech', address: '/water/map' },
   { name: 'enclosure-new', as: 'tech', address: '/water/new' },

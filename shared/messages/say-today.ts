@@ -34,7 +34,6 @@ const beside = (...words: (string | false)[]) => words.filter(Boolean).join(', '
 const dayOf = (t: Told) => t.has('day') && `day ${t.text('day')} of ${t.text('required')}`
 const caseWords = (t: Told) => `${t.text('case')} ${t.text('name')}`
 const byAndWhen = (t: Told) => beside(t.text('by'), t.at)
-const orderOf = (t: Told) => beside(t.text('number'), t.text('problem'))
 
 /** What there is to do, in a few words that name the place. */
 const titles = defineMessages({
@@ -118,7 +117,7 @@ const notes = defineMessages({
           t.has('held') && 'held, not to be given until a veterinarian lifts it',
         ),
   'order-not-carried-out': (t: Told) =>
-    `${beside(orderOf(t))}. ${t.text('given')} of ${counted(t.number('doses'), 'dose', 'doses')} recorded. Record what was given or withheld.`,
+    `${beside(t.text('problem'), t.drug)}. ${t.text('given')} of ${counted(t.number('doses'), 'dose', 'doses')} recorded. Record what was given or withheld.`,
   sample: sayStep,
   'volume-to-confirm': (t: Told) =>
     beside(t.text('waters'), `determined by ${t.text('by')}`, t.at, 'needs another person'),

@@ -18,10 +18,8 @@ export const todayWords = defineMessages({
       : p.all
         ? 'all of them overdue'
         : `${String(p.count)} of them overdue`,
-  othersLate: (p: { count: number }) =>
-    p.count === 1
-      ? 'One more is overdue in the other lanes.'
-      : `${String(p.count)} more are overdue in the other lanes.`,
+  othersLate: (p: { count: number; more: boolean }) =>
+    `${p.count === 1 ? 'One' : String(p.count)}${p.more ? ' more' : ''} ${p.count === 1 ? 'is' : 'are'} overdue in the other lanes.`,
   chooseLane: 'Lane that comes first and stands on the hour ruler',
   late: 'Overdue',
   now: 'now',
@@ -98,7 +96,7 @@ export const goWords = defineMessages({
   'bath-running': 'To the tank sheet',
   'second-calculation': 'Calculate blind',
   dose: 'Prepare the dose',
-  'order-not-carried-out': '',
+  'order-not-carried-out': 'Record it',
   sample: 'Record it',
   'volume-to-confirm': 'Read and confirm',
   'volume-check': '',
@@ -139,6 +137,12 @@ export const lateWords = defineMessages({
   minutes: (p: { count: number }) => `${String(p.count)} min late`,
   hours: (p: { count: number }) => `${String(p.count)} h late`,
   days: (p: { count: number }) => `${String(p.count)} d late`,
+} satisfies Record<Lateness['unit'], (p: { count: number }) => string>)
+
+export const agoWords = defineMessages({
+  minutes: (p: { count: number }) => `${String(p.count)} min ago`,
+  hours: (p: { count: number }) => `${String(p.count)} h ago`,
+  days: (p: { count: number }) => `${String(p.count)} d ago`,
 } satisfies Record<Lateness['unit'], (p: { count: number }) => string>)
 
 export const findWords = defineMessages({

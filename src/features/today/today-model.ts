@@ -13,7 +13,7 @@ import {
 } from '../../../shared/domain/today/today-kinds.ts'
 import type { TodayLane } from '../../../shared/domain/today/today-kinds.ts'
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
-import { lateWords } from '../../../shared/messages/today.ts'
+import { agoWords, lateWords } from '../../../shared/messages/today.ts'
 
 export const laneOf = (item: Pick<TodayWork, 'kind'>): TodayLane => todayKinds[item.kind].lane
 
@@ -89,6 +89,12 @@ export function viewToday(
     othersLate: open.filter((item) => isLate(item) && !own.includes(laneOf(item))).length,
     empty: items.every(({ state }) => state === 'done'),
   }
+}
+
+/** How long ago an urgent call was raised, in words. */
+export function agoText(call: TodayWork, at: string, zone: Zone): string {
+  const since = howLate(call, at, facilityDateOf(at, zone))
+  return since === null ? '' : agoWords[since.unit](since)
 }
 
 /** How late something is, in words; empty for what is not. */

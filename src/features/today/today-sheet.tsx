@@ -91,7 +91,9 @@ function TodayTop({ view }: { view: TodayView }) {
           ? `, ${todayWords.ofThemLate({ count: view.waitsLate, all: view.waitsLate === view.waits })}`
           : ''}
         {'. '}
-        {view.othersLate > 0 ? todayWords.othersLate({ count: view.othersLate }) : ''}
+        {view.othersLate > 0
+          ? todayWords.othersLate({ count: view.othersLate, more: view.waitsLate > 0 })
+          : ''}
         <span className="visually-hidden">{announced}</span>
       </p>
       <div className="row row-wrap">

@@ -13,7 +13,7 @@ import { Icon } from '../../ui/icon.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { addressOfWork } from './address-of.ts'
 import { useMarkSeen } from './mutations.ts'
-import { lateText } from './today-model.ts'
+import { agoText } from './today-model.ts'
 
 interface Drawn {
   at: string
@@ -52,7 +52,7 @@ function UrgentCall({ call, at, zone }: Drawn & { call: TodayWork }) {
             at: call.at === null ? '' : sayMoment(call.at, zone, at),
           })}
           {', '}
-          {lateText(call, at, zone)}
+          {agoText(call, at, zone)}
         </p>
         <p className={fate === 'not-sent' ? 'today-call-not-sent' : undefined}>{urgentFates[fate] ?? ''}</p>
         {isProblem(mark.error) ? <p role="alert">{mark.error.says}</p> : null}
