@@ -81,7 +81,8 @@ export const orderViewWords = defineMessages({
   range: (p: { range: string }) => `Range from the error of the volume: ${p.range}.`,
   working: 'Amount for each dose',
   workingLabel: 'Working of the amount',
-  unrounded: (p: { amount: string }) => `Unrounded: ${p.amount}.`,
+  rounded: (p: { unrounded: string; division: string; amount: string }) =>
+    `Unrounded ${p.unrounded}. The balance or measure reads to ${p.division}, so ${p.amount} is weighed or measured.`,
   volume: (p: { code: string }) => `net volume of ${p.code} and what is joined to it`,
   amounts: 'Signed and now',
   signedAmount: 'as signed',

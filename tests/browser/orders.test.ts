@@ -1,6 +1,7 @@
 import type { Browser, Page } from 'playwright-core'
 import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { installation } from '../../server/platform/http/request-context.ts'
 import { aTaxon, anAnimal } from '../builders/a-collection.ts'
 import {
   aBathWater,
@@ -11,6 +12,7 @@ import {
   readingsNow,
   signDraft,
 } from '../builders/an-order.ts'
+import { localMomentOf } from '../../src/lib/local-moment.ts'
 import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
@@ -30,10 +32,17 @@ beforeAll(async () => {
   app.clock.set(new Date())
   await app.composition.formulary.service.loadDefaults()
   for (const role of ['veterinarian', 'technician', 'keeper', 'registrar'] as const) await app.as(role)
-  await app.person({
+  const late = await app.person({
     email: 'vet2@harrow-point.example',
     printedName: 'Dr Late Licence',
     roles: ['veterinarian'],
+  })
+  await app.composition.people.service.enterLicence({ actor: installation, requestId: 'test' }, late.id, {
+    id: app.nextId(),
+    jurisdiction: 'Norrell Sound',
+    number: 'VL-19002',
+    validFrom: '2020-01-01',
+    validUntil: '2026-09-30',
   })
   owner = new pg.Client({ connectionString: app.ownerUrl })
   await owner.connect()
@@ -49,6 +58,7 @@ beforeAll(async () => {
   )
   const shrimpTank = await aBathWater(app, 'QT-4')
   const fish = await aSchool(app, shrimpTank.id, 2)
+  await readingsNow(app, shrimpTank.waterBodyId, { salinity: ['33.0', 'PSS-78'] }, now)
   const shrimp = await aTaxon(app, {
     scientificName: 'Lysmata amboinensis',
     commonName: 'Cleaner shrimp',
@@ -109,9 +119,17 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [/401 \(Unauthorized\)/, /409 \(Conflict\)/, /422 \(Unprocessable/]
+const expectedErrors = [
+  /401 \(Unauthorized\)/,
+  /403 \(Forbidden\)/,
+  /409 \(Conflict\)/,
+  /422 \(Unprocessable/,
+]
 const desk = { width: 1440, height: 900, expectedErrors }
 const phone = { width: 390, height: 844, expectedErrors }
+
+/** A date and time so many hours from now, as the facility's clock shows it. */
+const localIn = (hours: number) => localMomentOf(hoursFromNow(hours), 'America/Halifax')
 
 const picture = async (page: Page, name: string) => {
   const folder = process.env['PRATIQUE_PICTURES']
@@ -188,5 +206,128 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     expect(await alert.textContent()).toContain('do not dose')
     await expectSound(page, 'a broken order')
     await picture(page, `order-broken-${String(size.width)}`)
+  })
+
+  it('is written by a veterinarian: judged while typed, a stop overridden, warnings read, signed', async () => {
+    const page = await signedIn('veterinarian', size, '/orders/new')
+    await page.getByRole('combobox', { name: 'Enclosure whose water is treated' }).fill('QT-4')
+    await page.getByRole('option', { name: /QT-4/ }).first().click()
+    await page.getByRole('checkbox', { name: /Yellow tang/ }).check()
+    await expectSound(page, 'an empty order')
+    await picture(page, `order-new-${String(size.width)}`)
+    await page.getByLabel('Problem treated').fill('White spot, seen on gill mount')
+    await page.getByRole('combobox', { name: 'Drug product, into the water' }).fill('copper')
+    await page.getByRole('option', { name: /copper sulfate/ }).click()
+
+    // parts per million says nothing, and the form says what to type
+    const target = page.getByLabel('Target in the water', { exact: true })
+    await target.fill('2 ppm')
+    await page.getByLabel('Target is counted').focus()
+    await page
+      .getByText(/Parts per million can mean three things/)
+      .first()
+      .waitFor()
+    await target.fill('0.15')
+    // without a basis nothing is worked out, and no reason helps
+    await page.getByText('This stop can’t be overridden').first().waitFor()
+    await page.getByLabel('Target is counted').selectOption('free')
+    await page.getByRole('radio', { name: 'Left in the water' }).click()
+    await page.getByLabel('First dose').fill(localIn(3))
+    await page.getByRole('radio', { name: 'Extralabel' }).click()
+    await page.getByRole('radio', { name: 'tank', exact: true }).click()
+    await page.getByLabel('Balance or measure reads to', { exact: true }).fill('0.001')
+    await page.getByLabel('Stop the bath if').fill('any fish on its side')
+    // 0.15 mg/L × 2,181.4 L ÷ 25.45 % ÷ 99 % = 1.299 g, by hand
+    await page.locator('.dose-head').getByText('1.299').first().waitFor()
+    const signing = page.getByRole('region', { name: 'Sign as author of this order' })
+    await picture(page, `order-form-${String(size.width)}`)
+    await signing.getByText('One stop is open: remove its cause, or give a reason.').waitFor()
+    await expectSound(page, 'an order with its cautions')
+    await page.getByLabel('Why it is overridden').fill('the shrimp moves to QT-5 before the first gram')
+    for (const read of await page.getByRole('checkbox', { name: /I have read this/ }).all())
+      await read.check()
+    expect(await signing.textContent()).toContain('Norrell Sound, licence VL-20417, valid to')
+    await picture(page, `order-form-${String(size.width)}`)
+    await signing.getByLabel('Your password').fill('wrong password')
+    await signing.getByRole('button', { name: 'Sign order' }).click()
+    await signing
+      .getByText(/password/i)
+      .last()
+      .waitFor()
+    await page
+      .locator('.wrong')
+      .filter({ hasText: /password/i })
+      .waitFor()
+    // what was typed and answered survived the refusal
+    expect(await page.getByLabel('Why it is overridden').inputValue()).toContain('QT-5')
+    await signing.getByLabel('Your password').fill(password)
+    await signing.getByRole('button', { name: 'Sign order' }).click()
+    await page.getByText('Checked now: this is the text that was signed.').waitFor()
+    expect(
+      await page.getByText(/Overridden by Test veterinarian, reason: the shrimp moves/).isVisible(),
+    ).toBe(true)
+  })
+
+  it('cannot be signed with a licence that ended, and says so', async () => {
+    const page = await signedIn('vet2', size, `/orders/${numbers.draft}/edit`)
+    await page.getByText(/Licence VL-19002 ended on 30.Sep.2026/).waitFor()
+    const sign = page.getByRole('button', { name: 'Sign order' })
+    expect(await sign.getAttribute('aria-disabled')).toBe('true')
+    expect(await page.getByLabel('Your password').count()).toBe(0)
+    await expectSound(page, 'an order that cannot be signed')
+    await picture(page, `order-vet2-${String(size.width)}`)
+  })
+
+  it('holds both texts when two people wrote one draft, and asks before unsaved text is left', async () => {
+    const page = await signedIn('veterinarian', size, `/orders/${numbers.draft}/edit`)
+    const problem = page.getByLabel('Problem treated')
+    await problem.waitFor()
+    const technician = await app.as('technician')
+    const order = (await technician.agent.get(`/api/orders/${numbers.draft}`).expect(200)).body
+    await technician.agent
+      .put(`/api/orders/${numbers.draft}/draft`)
+      .send({
+        expectedVersion: order.version,
+        fields: { ...order.draft, problem: `Typed by the technician at ${String(size.width)}` },
+      })
+      .expect(200)
+    await problem.fill('Typed by the veterinarian')
+    await page.getByRole('button', { name: 'Keep as draft' }).click()
+    await page.getByRole('heading', { name: /Somebody else saved this draft/ }).waitFor()
+    expect(await page.getByText(`Typed by the technician at ${String(size.width)}`).isVisible()).toBe(true)
+    await expectSound(page, 'two texts of one draft')
+    await picture(page, `order-stale-${String(size.width)}`)
+    await page.getByRole('button', { name: 'Save mine over it' }).click()
+    await page.getByRole('heading', { name: /Somebody else saved this draft/ }).waitFor({ state: 'detached' })
+    expect(await problem.inputValue()).toBe('Typed by the veterinarian')
+    const kept = (await technician.agent.get(`/api/orders/${numbers.draft}`).expect(200)).body
+    expect(kept.draft.problem).toBe('Typed by the veterinarian')
+
+    await problem.fill('Typed and not kept')
+    await page.getByRole('link', { name: 'Back to the order' }).click()
+    await page.getByRole('alertdialog').getByText('Leave without keeping it?').waitFor()
+    await page.getByRole('button', { name: 'Go on writing' }).click()
+    expect(await problem.inputValue()).toBe('Typed and not kept')
+    await page.getByRole('link', { name: 'Back to the order' }).click()
+    await page.getByRole('button', { name: 'Leave', exact: true }).click()
+    await page.getByText('Not signed. Nothing may be dosed by it.').first().waitFor()
+    await expectSound(page, 'a draft, to be read')
+    await picture(page, `order-draft-${String(size.width)}`)
+  })
+
+  it('is held by a keeper in one touch, and the hold lifted by a veterinarian', async () => {
+    const keeper = await signedIn('keeper', size, `/orders/${numbers.signed}`)
+    await keeper.getByRole('button', { name: 'Hold this order' }).click()
+    await keeper.getByText(/Held by Test keeper/).waitFor()
+    await picture(keeper, `order-held-${String(size.width)}`)
+    expect(await keeper.getByRole('button', { name: 'Lift the hold' }).getAttribute('aria-disabled')).toBe(
+      'true',
+    )
+    const vet = await signedIn('veterinarian', size, `/orders/${numbers.signed}`)
+    await vet.getByRole('button', { name: 'Lift the hold' }).click()
+    await vet.getByLabel('Why it may go on').fill(`Looked at ${String(size.width)}, breathes normally`)
+    await vet.getByRole('dialog').getByRole('button', { name: 'Lift the hold' }).click()
+    await vet.getByText(new RegExp(`Hold lifted: Looked at ${String(size.width)}`)).waitFor()
+    expect(await vet.getByText(/^Held by/).count()).toBe(0)
   })
 })

@@ -1,4 +1,5 @@
 export { OrdersList, ordersAsked } from './orders-list.tsx'
+export { OrderForm } from './order-form.tsx'
 export { orderTitle, SignedOrder, UnsignedOrder } from './order-view.tsx'
 export { orderQuery, ordersCsvAddress, ordersKey, ordersQuery } from './queries.ts'
 export { OrderSignature } from './signature-state.tsx'

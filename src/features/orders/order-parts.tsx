@@ -47,6 +47,33 @@ export function OrderWorking({ lines }: { lines: OrderPreview['working'] }) {
   )
 }
 
+const unroundedDigits = 8
+
+/** From the last line of the working to what is weighed: the step of the balance, and what the volume's error makes of it. */
+export function AmountNotes({
+  amount,
+  division,
+}: {
+  amount: NonNullable<OrderPreview['amount']>
+  division: EnteredQuantity | null
+}) {
+  const unrounded = formatDose(Number(amount.unrounded.toPrecision(unroundedDigits)), amount.unroundedUnit)
+  return (
+    <>
+      {amount.measured && division ? (
+        <p className="t-note">
+          {words.rounded({
+            unrounded: unrounded.text,
+            division: doseOfEntered(division),
+            amount: amount.text,
+          })}
+        </p>
+      ) : null}
+      {amount.rangeText ? <p className="t-note">{words.range({ range: amount.rangeText })}</p> : null}
+    </>
+  )
+}
+
 /** What has to be true before each dose; judged at the dose, never ticked here. */
 export function OrderConditions({ conditions }: { conditions: OrderPreview['conditions'] }) {
   if (conditions.length === 0)

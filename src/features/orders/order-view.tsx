@@ -19,7 +19,7 @@ import { DoseCalendar } from './dose-calendar.tsx'
 import { DoseText } from './dose-text.tsx'
 import { OrderActs } from './order-acts.tsx'
 import { DraftFacts, SignedFacts } from './order-facts.tsx'
-import { OrderConditions, OrderWater, OrderWorking } from './order-parts.tsx'
+import { AmountNotes, OrderConditions, OrderWater, OrderWorking } from './order-parts.tsx'
 import { OrderHistory, OrderVersions } from './order-history.tsx'
 import { PhaseTag } from './phase-tag.tsx'
 import { SignedCautions } from './signed-cautions.tsx'
@@ -189,9 +189,7 @@ export function SignedOrder({
               <section className="stack">
                 <h2 className="t-head">{words.working}</h2>
                 <OrderWorking lines={content.working} />
-                {content.amount.rangeText ? (
-                  <p className="t-note">{words.range({ range: content.amount.rangeText })}</p>
-                ) : null}
+                <AmountNotes amount={content.amount} division={content.fields.division} />
               </section>
               {version.superseded ? null : (
                 <DoseCalendar order={order} zone={zone} now={now} sheets={record.allowed} />

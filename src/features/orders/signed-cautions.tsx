@@ -1,10 +1,8 @@
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import type { SaidCaution } from '../../../shared/contracts/orders.contract.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
+import { cautionKey } from './answers-model.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
-
-/** A key for a caution among others: a rule may fire more than once. */
-export const cautionKey = (caution: SaidCaution) => `${caution.ruleId} ${caution.code} ${caution.text}`
 
 /** Where a caution comes from and what would resolve it, one touch away. */
 export function CautionSource({ caution }: { caution: SaidCaution }) {

@@ -1,0 +1,110 @@
+import { useState } from 'react'
+import { PenLine } from 'lucide-react'
+import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
+import { useMay } from '../../lib/may.ts'
+import { useMe } from '../../lib/me.ts'
+import { Button } from '../../ui/button.tsx'
+import { PasswordField } from '../../ui/password-field.tsx'
+import { SignatureBlock } from '../../ui/signature-block.tsx'
+import { WrongSummary } from '../../ui/wrong-summary.tsx'
+
+/**
+ * Where an order is signed: as what, by whom with which licence, and the password again. Whoever cannot sign is told
+ * why, in place of the field.
+ */
+export function SignBlock({
+  shut,
+  missing,
+  busy,
+  passwordWrong,
+  refused,
+  onSign,
+}: {
+  /** Why the order can't be signed as it stands. */
+  shut: string | undefined
+  missing: readonly string[]
+  busy: boolean
+  passwordWrong: string | undefined
+  /** Why the last attempt was refused, where it was not the password. */
+  refused: string | undefined
+  onSign: (password: string) => Promise<boolean>
+}) {
+  const me = useMe()
+  const may = useMay('order.sign')
+  const [password, setPassword] = useState('')
+  const [asked, setAsked] = useState(false)
+  const valid = me.licences.find((licence) => licence.validToday)
+  const ended = [...me.licences].sort((a, b) => b.validUntil.localeCompare(a.validUntil))[0]
+  const send = async () => {
+    setAsked(true)
+    if (password === '') return
+    // a password is typed for one attempt
+    if (await onSign(password)) setPassword('')
+    setAsked(false)
+  }
+  return (
+    <div id="sign" tabIndex={-1}>
+      <SignatureBlock
+        meaning={words.sign}
+        who={
+          valid
+            ? words.signWho({
+                name: me.printedName,
+                jurisdiction: valid.jurisdiction,
+                number: valid.number,
+                until: sayDate(valid.validUntil),
+              })
+            : me.printedName
+        }
+      >
+        {may.allowed ? (
+          <form
+            className="stack"
+            noValidate
+            onSubmit={(event) => {
+              event.preventDefault()
+              void send()
+            }}
+          >
+            <p className="signature-text">{words.signMeaning}</p>
+            {missing.length > 0 ? (
+              <div>
+                <b>{words.missingHeading}</b>
+                <ul className="missing">
+                  {missing.map((one) => (
+                    <li key={one}>{one}</li>
+                  ))}
+                </ul>
+              </div>
+            ) : null}
+            <PasswordField
+              label={words.password}
+              autoComplete="off"
+              value={password}
+              wrong={passwordWrong ?? (asked && password === '' ? words.passwordNeeded : undefined)}
+              onChange={(event) => setPassword(event.target.value)}
+            />
+            <WrongSummary fields={[]} general={refused} />
+            <Button kind="primary" icon={PenLine} type="submit" shut={busy ? words.signing : shut}>
+              {words.signAct}
+            </Button>
+          </form>
+        ) : (
+          <div className="stack">
+            <p>
+              {me.roles.includes('veterinarian')
+                ? ended
+                  ? words.licenceEnded({ number: ended.number, until: sayDate(ended.validUntil) })
+                  : words.noLicence
+                : may.why}
+            </p>
+            <Button icon={PenLine} shut={may.why ?? ''}>
+              {words.signAct}
+            </Button>
+          </div>
+        )}
+      </SignatureBlock>
+    </div>
+  )
+}
