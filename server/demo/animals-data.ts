@@ -73,16 +73,6 @@ const school = (
 
 const collected = { kind: 'wild-collection' } as const
 
-/** Shipments whose quarantine the practice scenario shows: batch, enclosure and day of the last arrival. */
-export const demoBatches = {
-  reef: { enclosure: 'QT-1', arrivedDaysAgo: 24 },
-  'reef-addition': { enclosure: 'QT-1', arrivedDaysAgo: 12 },
-  seahorses: { enclosure: 'QT-2', arrivedDaysAgo: 16 },
-  rays: { enclosure: 'QT-3', arrivedDaysAgo: 19 },
-  sturgeon: { enclosure: 'QT-4', arrivedDaysAgo: 21 },
-  amphibians: { enclosure: 'QT-5', arrivedDaysAgo: 38 },
-} as const
-
 export const demoAnimals: readonly DemoAnimal[] = [
   // kelp hall
   school('kelp-hall', 'Tautogolabrus adspersus', 'KH-1', 1460, 85, {
@@ -198,6 +188,7 @@ export const demoAnimals: readonly DemoAnimal[] = [
   ),
   ...(['Mallet', 'Anvil'] as const).map((name, i) =>
     one('ray-pool', 'Sphyrna tiburo', 'RP-1', 480, {
+      kind: 'loan-in',
       name,
       transponder: `000 000 306 0${String(11 + i)}`,
       weight: weighed(5.1 + i * 0.6, 3, 30, 'kg', 2),
@@ -223,6 +214,8 @@ export const demoAnimals: readonly DemoAnimal[] = [
   ),
 
   // quarantine wing
+  school('lumpfish', 'Cyclopterus lumpus', 'QT-6', 66, 6, { ...collected, stage: 'subadult' }),
+  school('cod', 'Gadus morhua', 'QT-6', 9, 24, { ...collected, stage: 'subadult' }),
   school('reef', 'Zebrasoma flavescens', 'QT-1', 24, 6, {
     kind: 'purchase',
     weight: weighed(0.094, 6, 10, 'g', 1),
@@ -242,7 +235,7 @@ export const demoAnimals: readonly DemoAnimal[] = [
       weight: weighed(0.31 + i * 0.05, 3, 7, 'g', 0),
     }),
   ),
-  school('seahorses', 'Hippocampus erectus', 'QT-2', 16, 14, {
+  school('seahorses', 'Hippocampus erectus', 'QT-2', 33, 14, {
     kind: 'transfer-in',
     weight: weighed(0.0112, 5, 7, 'g', 1),
   }),

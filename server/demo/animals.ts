@@ -6,11 +6,9 @@ import type { Accession } from '../features/animals/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
 import { demoAnimals } from './animals-data.ts'
 import type { DemoAnimal } from './animals-data.ts'
+import { createTimeline, dayMs, historyDays } from './demo-time.ts'
 import type { DemoActors, DemoPerson } from './people.ts'
 import type { DemoOutside, DemoWaterIds } from './water.ts'
-
-const dayMs = 86_400_000
-const historyDays = 90
 
 /** What a veterinarian of the practice scenario has said about whole groups of taxa. */
 const groupSensitivities: Partial<
@@ -67,8 +65,8 @@ export interface SeededAnimal extends DemoAnimal {
   accession: string
 }
 
-/** Enters one accession; the register takes this over with an acquisition around it. */
-export type EnterAccession = (given: Accession, demo: DemoAnimal) => Promise<string>
+/** Enters what came together, giving the accession numbers; the register puts an acquisition around it. */
+export type EnterShipment = (shipment: readonly { given: Accession; demo: DemoAnimal }[]) => Promise<string[]>
 
 /** A number between -1 and 1 that is the same on every machine. */
 function wobble(seed: number): number {
@@ -84,7 +82,7 @@ function wobble(seed: number): number {
 export async function seedAnimals(
   composition: Composition,
   outside: DemoOutside &
-    Pick<DemoWaterIds, 'enclosureIds'> & { taxa: Map<string, string>; enter?: EnterAccession },
+    Pick<DemoWaterIds, 'enclosureIds'> & { taxa: Map<string, string>; enter?: EnterShipment },
 ): Promise<SeededAnimal[]> {
   const { clock, now, people, taxa } = outside
   const { animals, parts } = composition
@@ -95,26 +93,23 @@ export async function seedAnimals(
     if (id === undefined) throw new Error(`The practice scenario has no enclosure ${code}`)
     return id
   }
-  const enter: EnterAccession =
+  const enter: EnterShipment =
     outside.enter ??
-    (async (given) => {
-      let accession = ''
-      await parts.transactions.inTransaction(as('registrar'), async (tx) => {
-        accession = (await animals.service.accessionAnimal(tx, given)).accession
-      })
-      return accession
-    })
+    ((shipment) =>
+      parts.transactions.inTransaction(as('registrar'), async (tx) => {
+        const accessions: string[] = []
+        for (const { given } of shipment)
+          accessions.push((await animals.service.accessionAnimal(tx, given)).accession)
+        return accessions
+      }))
 
   const seeded: SeededAnimal[] = []
-  const plan: { at: Date; run: () => Promise<unknown> }[] = []
-  const earliest = at(historyDays)
-  const later = (when: Date, run: () => Promise<unknown>) =>
-    plan.push({ at: when < earliest ? earliest : when, run })
+  const { later, play } = createTimeline(clock, now)
+  const shipments = new Map<string, { given: Accession; demo: DemoAnimal }[]>()
 
   demoAnimals.forEach((animal, i) => {
     const id = parts.ids.next()
-    const arrived = at(animal.arrivedDaysAgo, i)
-    const happenedAt = arrived.toISOString()
+    const happenedAt = at(animal.arrivedDaysAgo).toISOString()
     const identifiers = [
       ...(animal.transponder
         ? [{ id: parts.ids.next(), kind: 'transponder' as const, value: `999 ${animal.transponder}` }]
@@ -123,26 +118,32 @@ export async function seedAnimals(
         ? [{ id: parts.ids.next(), kind: 'ring' as const, value: animal.ring, place: 'legs' }]
         : []),
     ]
-    later(arrived, async () => {
-      const accession = await enter(
-        {
-          id,
-          form: animal.form,
-          taxonId: taxa.get(animal.scientificName) ?? '',
-          name: animal.name ?? null,
-          sex: animal.sex ?? (animal.form === 'group' ? 'mixed' : 'unknown'),
-          stage: animal.stage ?? 'adult',
-          count: animal.count,
-          kind: animal.kind,
-          enclosureId: enclosureId(animal.enclosure),
-          happenedAt,
-          identifiers,
-          ...(animal.estimate ? { estimate: animal.estimate } : {}),
-        },
-        animal,
-      )
-      seeded.push({ ...animal, id, accession })
-    })
+    const given: Accession = {
+      id,
+      form: animal.form,
+      taxonId: taxa.get(animal.scientificName) ?? '',
+      name: animal.name ?? null,
+      sex: animal.sex ?? (animal.form === 'group' ? 'mixed' : 'unknown'),
+      stage: animal.stage ?? 'adult',
+      count: animal.count,
+      kind: animal.kind,
+      enclosureId: enclosureId(animal.enclosure),
+      happenedAt,
+      identifiers,
+      ...(animal.estimate ? { estimate: animal.estimate } : {}),
+    }
+    const key = `${animal.batch} ${animal.kind} ${String(animal.arrivedDaysAgo)}`
+    const shipment = shipments.get(key) ?? []
+    shipment.push({ given, demo: animal })
+    if (shipment.length === 1) {
+      shipments.set(key, shipment)
+      later(happenedAt, async () => {
+        const accessions = await enter(shipment)
+        shipment.forEach((one, n) =>
+          seeded.push({ ...one.demo, id: one.given.id, accession: accessions[n] ?? '' }),
+        )
+      })
+    }
     const { weight } = animal
     if (!weight) return
     const firstDay = Math.min(historyDays, animal.arrivedDaysAgo) - 1
@@ -210,10 +211,6 @@ export async function seedAnimals(
     }),
   )
 
-  for (const step of plan.sort((a, b) => a.at.getTime() - b.at.getTime())) {
-    clock.set(step.at)
-    await step.run()
-  }
-  clock.set(now)
+  await play()
   return seeded
 }

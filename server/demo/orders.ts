@@ -115,7 +115,7 @@ const demoOrders: readonly DemoOrder[] = [
     writtenHours: -2,
     startHours: 4,
     fate: 'draft',
-    fields: { ...praziquantel, problem: 'Skin flukes seen on scrape, 1 of 10' },
+    fields: { ...praziquantel, problem: 'Precaution before they move to the gallery; scrapes clean' },
   },
   {
     enclosure: 'QT-4',

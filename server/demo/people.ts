@@ -27,6 +27,7 @@ const facilitySettings: Partial<Record<SettingKey, string>> = {
   'facility.jurisdictions': 'Norrell Sound',
   'facility.gallon': 'us',
   'numbers.accession': 'HP-{0000}',
+  'notices.on-call': `Dr Ilse Marrow | +1 555 0160 | vet@${mailDomain}, Dr Piers Oland | +1 555 0161 | vet2@${mailDomain}`,
 }
 
 const yearsFrom = (at: Date, years: number) =>

@@ -7,6 +7,8 @@ import { seedAnimals, seedTaxa } from './animals.ts'
 import { seedFormulary } from './formulary.ts'
 import { seedOrders } from './orders.ts'
 import { demoPassword, demoPeople, seedPeople } from './people.ts'
+import { seedQuarantine } from './quarantine.ts'
+import { seedRegister } from './register.ts'
 import { seedWater } from './water.ts'
 
 const seedLock = 4400_0003
@@ -34,7 +36,11 @@ export async function seedDemo(outside: {
     await seedFormulary(composition, actors, now)
     const { enclosureIds } = await seedWater(composition, { clock, now, people: actors })
     const taxa = await seedTaxa(composition, actors)
-    await seedAnimals(composition, { clock, now, people: actors, enclosureIds, taxa })
+    const register = await seedRegister(composition, { clock, now, people: actors, taxa })
+    const animals = { clock, now, people: actors, enclosureIds, taxa, enter: register.enter }
+    const seeded = await seedAnimals(composition, animals)
+    await register.depart(seeded)
+    await seedQuarantine(composition, { clock, now, people: actors, seeded, enclosureIds })
     await seedOrders(composition, { clock, now, people: actors, enclosureIds })
     await composition.close()
     return true

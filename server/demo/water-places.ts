@@ -53,7 +53,8 @@ function quarantineSystem(
   return {
     area: 'Quarantine wing',
     boundary: 'Quarantine wing',
-    airSpace: given.climate === 'amphibian' ? 'Amphibian room' : 'Quarantine hall',
+    // Each system stands in a room of its own: a fish that comes into one restarts no other
+    airSpace: `Quarantine room ${n}`,
     climate: given.climate,
     enclosures: [
       {

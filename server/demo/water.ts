@@ -1,17 +1,14 @@
-import { addDays, facilityDateOf } from '../../shared/domain/time/facility-date.ts'
-import { instantOfLocalTime } from '../../shared/domain/time/local-time.ts'
 import type { VolumeSheet } from '../../shared/domain/water/volume-sheet.ts'
 import type { Composition } from '../composition.ts'
 import type { settableClock } from '../platform/clock.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
+import { dayMs, demoTimes, historyDays } from './demo-time.ts'
 import type { DemoActors, DemoPerson } from './people.ts'
 import { demoLand, demoWaters } from './water-places.ts'
 import type { DemoEnclosure, DemoWater } from './water-places.ts'
 import { measuredIn, wanderingReadings } from './water-readings.ts'
 import type { DemoReading } from './water-readings.ts'
 
-const dayMs = 86_400_000
-const historyDays = 90
 /** Places were in use long before the history that is shown. */
 const inUseDays = 900
 
@@ -103,7 +100,7 @@ function sheetOf(water: DemoWater): VolumeSheet | null {
 export async function seedWater(composition: Composition, outside: DemoOutside): Promise<DemoWaterIds> {
   const { clock, now, people } = outside
   const { enclosures, water, parts, facility } = composition
-  const zone = await facility.service.zone()
+  const { at: localTime, dateOf } = demoTimes(now, await facility.service.zone())
   const as = (who: DemoPerson): RequestContext => ({ actor: people[who], requestId: 'demo' })
   const start = new Date(now.getTime() - historyDays * dayMs)
   const inUseFrom = new Date(now.getTime() - inUseDays * dayMs).toISOString()
@@ -114,12 +111,6 @@ export async function seedWater(composition: Composition, outside: DemoOutside):
     machineIds: new Map(),
   }
   const bodyId = (code: string) => ids.waterBodyIds.get(code) ?? ''
-  /** A time of day at the facility, so many days before now; never ahead of now. */
-  const localTime = (daysAgo: number, time: string): string => {
-    const date = facilityDateBefore(now, daysAgo, zone)
-    const at = instantOfLocalTime(date, time, zone)
-    return at > now.toISOString() ? now.toISOString() : at
-  }
 
   async function enterEnclosure(given: DemoEnclosure, of: DemoWater): Promise<void> {
     const id = parts.ids.next()
@@ -218,7 +209,7 @@ export async function seedWater(composition: Composition, outside: DemoOutside):
         ...(of.sump ? [bodyId(of.sump.code)] : []),
       ],
       sheet: sheet as never,
-      nextCheckOn: facilityDateBefore(now, historyDays + 30 - 365, zone),
+      nextCheckOn: dateOf(historyDays + 30 - 365),
       note: 'Lengths by tape, displacement by bucket.',
     })
     if (of.volume === 'confirmed') await water.services.volumes.confirmVolume(as('tech2'), id, {})
@@ -337,10 +328,6 @@ export async function seedWater(composition: Composition, outside: DemoOutside):
   clock.set(now)
   return ids
 }
-
-/** The facility date so many days before an instant. */
-const facilityDateBefore = (at: Date, days: number, zone: string) =>
-  addDays(facilityDateOf(at.toISOString(), zone), -days)
 
 /** Two stories in the readings: ammonia climbs in the spare system over the last days, and QT-2 once ran warm. */
 function shaped(code: string, day: number, readings: DemoReading[]): DemoReading[] {

@@ -86,6 +86,8 @@ export function createQuarantine(
   return {
     services: { cases, events, treatments, protocols, observations, notices, clearance },
     queries,
+    /** Prints the certificate of a cleared case. */
+    printClearance: print,
     /** Observations, rounds and urgent calls, for screens and the worklist. */
     observationQueries,
     /** When each case was last looked at in each of its enclosures. */

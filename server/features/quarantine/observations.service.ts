@@ -124,7 +124,8 @@ export function createObservationsService(
 
         const heads = await casesThere(tx, here, times.happenedAt)
         const [first] = heads
-        const locked = first ? await writer.lock(tx, first.number) : null
+        // A look changes no clock unless bodies are found: only then the case and its animals are locked
+        const locked = first && (given.foundDead ?? 0) > 0 ? await writer.lock(tx, first.number) : null
         await repository.insertObservation(
           tx,
           row,
