@@ -89,13 +89,6 @@ describe('the practice scenario', () => {
       legs: 1,
     }
     // The day of loading is 1 Dec 2026. Days in brackets: day 0, then day 0 + the protocol's length.
-    console.log(
-      JSON.stringify(
-        rows.map((row) => [row.number, told(row.name)]),
-        null,
-        0,
-      ),
-    )
     // [26 Sep] cleared 36 days later
     expect(told('Lumpfish')).toMatchObject({ status: 'cleared', day0On: '2026-09-26', endedOn: '2026-11-01' })
     // [24 Oct + 60]
