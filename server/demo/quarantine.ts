@@ -3,11 +3,11 @@ import type { Composition } from '../composition.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
 import type { SeededAnimal } from './animals.ts'
 import { createCaseTeller, createLooks } from './case-teller.ts'
-import type { TellerParts } from './case-teller.ts'
+import type { CaseStory, TellerParts } from './case-teller.ts'
 import { createTimeline, demoTimes, historyDays } from './demo-time.ts'
 import { demoPassword } from './people.ts'
 import { demoProtocols, demoProtocolSource } from './quarantine-protocols.ts'
-import type { DemoOutside } from './water.ts'
+import type { DemoOutside, DemoWaterIds } from './water.ts'
 
 const minuteMs = 60_000
 const hourMs = 60 * minuteMs
@@ -15,6 +15,7 @@ const hourMs = 60 * minuteMs
 interface StoryParts extends TellerParts {
   batch: (...names: string[]) => SeededAnimal[]
   enclosureId: (code: string) => string
+  waterBodyId: (code: string) => string
 }
 
 /**
@@ -23,7 +24,8 @@ interface StoryParts extends TellerParts {
  */
 export async function seedQuarantine(
   composition: Composition,
-  outside: DemoOutside & { seeded: readonly SeededAnimal[]; enclosureIds: ReadonlyMap<string, string> },
+  outside: DemoOutside &
+    Pick<DemoWaterIds, 'enclosureIds' | 'waterBodyIds'> & { seeded: readonly SeededAnimal[] },
 ): Promise<void> {
   const { clock, now, people, seeded, enclosureIds } = outside
   const times = demoTimes(now, await composition.facility.service.zone())
@@ -39,6 +41,7 @@ export async function seedQuarantine(
     protocols,
     batch: (...names) => seeded.filter((one) => names.includes(one.batch)),
     enclosureId: (code) => enclosureIds.get(code) ?? '',
+    waterBodyId: (code) => outside.waterBodyIds.get(code) ?? '',
   }
   lumpfish(parts)
   amphibians(parts)
@@ -60,6 +63,7 @@ async function seedProtocols(
   const as = (who: 'tech' | 'vet'): RequestContext => ({ actor: people[who], requestId: 'demo' })
   const [simple] = await quarantine.queries.protocols()
   const ids = new Map([[simple?.code ?? '', simple?.id ?? '']])
+  await protocols.confirm(as('vet'), simple?.code ?? '', 1, 'Read through; taken as it is')
   for (const { code, name, content } of demoProtocols) {
     const id = parts.ids.next()
     await protocols.propose(as('tech'), {
@@ -177,7 +181,10 @@ function reef(parts: StoryParts): void {
     masks: true,
     plannedEndOn: parts.times.dateOf(-13),
   })
+  copperReadings(parts, story)
   story.joins(12, parts.batch('reef-addition'))
+  story.step([11, '09:30'], 'count-in', 'The three lionfish counted in')
+  story.sample([10, '10:30'], [10, '15:00'], 'mounts-in', { testKey: 'wet-mount', result: 'negative' })
   // reported, restarted the clock, and found to be a mistake
   const gear = parts.composition.parts.ids.next()
   story.report(
@@ -199,6 +206,31 @@ function reef(parts: StoryParts): void {
     forVeterinarian: true,
     urgent: true,
   })
+}
+
+/** Free copper as it was read each day of the course: three days of ramp, then held. */
+function copperReadings(parts: StoryParts, story: CaseStory): void {
+  const { measurements } = parts.composition.water.services
+  const held = ['0.16', '0.17', '0.15', '0.18', '0.16', '0.16', '0.17']
+  for (let day = 0; day <= 22; day++) {
+    const moment = [22 - day, '11:30'] as const
+    if (!parts.times.hasBeen(...moment)) continue
+    const value = ['0.05', '0.10'][day] ?? held[day % held.length] ?? ''
+    story.then(moment, (happenedAt) =>
+      measurements.recordReadings(story.as('tech2'), {
+        waterBodyId: parts.waterBodyId('QT-1'),
+        happenedAt,
+        readings: [
+          {
+            id: story.next(),
+            parameter: 'copper-free',
+            value: { value, unit: 'mg/L' },
+            instrument: 'Photometer 2',
+          },
+        ],
+      }),
+    )
+  }
 }
 
 /** A death that extended the clock until a veterinarian signed its cause; gill clips are due. */
