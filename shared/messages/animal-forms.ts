@@ -7,7 +7,6 @@ export const animalForms = defineMessages({
   back: 'Back',
   when: 'When it happened',
   whenHint: (p: { offset: string }) => `Facility time, ${p.offset}.`,
-  typeTime: 'Give the date and the time.',
   note: 'Remarks',
   reason: 'Why',
   reasonHint: 'At least 3 letters; it stays on the record.',

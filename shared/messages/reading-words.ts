@@ -52,7 +52,6 @@ export const readingWords = defineMessages({
   save: (p: { count: number }) =>
     p.count === 0 ? 'Record readings' : `Record ${counted(p.count, 'reading', 'readings')}`,
   typeOne: 'Type at least one value',
-  typeTime: 'Type the date and the time.',
   saved: (p: { count: number; code: string }) =>
     `${counted(p.count, 'reading', 'readings')} recorded for ${p.code}`,
   phNbs: 'pH, NBS scale',

@@ -23,10 +23,11 @@ function says(issue: Issue, value: unknown): string {
  * @param needed names of fields that the form itself asks for, though the schema would let them pass
  */
 export function bodyResolver<V extends FieldValues>(
-  schema: z.ZodType,
+  schema: z.ZodType | undefined,
   toBody: (values: V) => unknown,
   needed: (values: V) => readonly string[] = () => [],
 ): Resolver<V> {
+  if (!schema) throw new Error('a form needs a contract with a body')
   return (values) => {
     const body = toBody(values)
     const parsed = schema.safeParse(body)

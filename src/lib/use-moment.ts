@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { clientWords } from '../../shared/messages/client.ts'
+import { sayInstantWithOffset } from '../../shared/messages/say-date.ts'
 import { instantOfMoment, localMomentOf } from './local-moment.ts'
 import { useMe } from './me.ts'
 
@@ -10,7 +11,15 @@ export function useMoment() {
   const [moment, setMoment] = useState(() => localMomentOf(opened, zone))
   // While the minute stands as it opened, the instant is the one of opening, seconds and all
   const instant = moment === localMomentOf(opened, zone) ? opened : instantOfMoment(moment, zone)
-  return { zone, moment, setMoment, instant, missing: instant === null ? clientWords.typeTime : undefined }
+  return {
+    zone,
+    moment,
+    setMoment,
+    instant,
+    missing: instant === null ? clientWords.typeTime : undefined,
+    /** The moment in words: browsers write days and months in either order. */
+    inWords: instant === null ? undefined : sayInstantWithOffset(instant, zone),
+  }
 }
 
 export type Moment = ReturnType<typeof useMoment>

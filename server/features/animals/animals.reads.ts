@@ -1,6 +1,7 @@
 import type { AnimalForm, BirthKind, LifeStage, Sex } from '../../../shared/domain/animals/description.ts'
 import type { QuarantineKindName, TaxonGroup } from '../../../shared/domain/taxa/taxon-group.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { containing } from '../../platform/database/like.ts'
 
 /** An animal or group as it stood at an instant. */
 export interface AnimalReadRow {
@@ -112,8 +113,6 @@ const asOf = `
                           AND NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
                                            WHERE f.lock_id = k.id AND f.happened_at <= $1)) k ON true`
 
-const escapeLike = (text: string) => text.replace(/[\\%_]/g, '\\$&')
-
 /** Animals and groups at an instant, by whatever filter; `total` of each row counts all that fit. */
 export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<AnimalReadRow[]> {
   const values: unknown[] = [filter.at]
@@ -132,7 +131,7 @@ export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<Animal
   if (filter.state === 'here') before.push('s.enclosure_id IS NOT NULL')
   if (filter.state === 'gone') before.push('s.enclosure_id IS NULL')
   for (const word of (filter.q ?? '').split(/\s+/).filter(Boolean)) {
-    const like = put(`%${escapeLike(word)}%`)
+    const like = put(containing(word))
     const key = word.toUpperCase().replace(/[^0-9A-Z]/g, '')
     const byMark = key
       ? `OR EXISTS (SELECT 1 FROM identifiers i WHERE i.animal_id = r.id AND i.value_key LIKE ${put(`%${key}%`)})`

@@ -44,10 +44,13 @@ export interface BathFactsParts {
  */
 export function createBathFactsReader(parts: BathFactsParts) {
   return {
-    /** @returns null when there is no such enclosure or it has no water */
+    /**
+     * @param agent what is to be given; null while nothing is chosen, which leaves what is known of an agent unknown
+     * @returns null when there is no such enclosure or it has no water
+     */
     async read(
       enclosureId: string,
-      agent: AgentCode,
+      agent: AgentCode | null,
       at: Date,
       options: { db?: Db; exceptOrderId?: string | null } = {},
     ): Promise<BathSituation | null> {
@@ -59,8 +62,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
       const taxonIds = [...new Set(animals.map((animal) => animal.taxonId))]
       // One after the other: inside a transaction there is one connection
       const uses = await readAgentUses(db, enclosureIds, at, options.exceptOrderId ?? null)
-      const given = await readGivenInLast24h(db, enclosureIds, agent, at)
-      const experienced = await readExperiencedTaxa(db, agent, taxonIds, at)
+      const given = agent && (await readGivenInLast24h(db, enclosureIds, agent, at))
+      const experienced = agent && (await readExperiencedTaxa(db, agent, taxonIds, at))
       const temperatures = await parts.water.recentReadings(
         water.bodies.map((body) => body.id),
         'temperature',
@@ -69,9 +72,9 @@ export function createBathFactsReader(parts: BathFactsParts) {
         db,
       )
       const zone = await parts.zone()
-      const newTaxa = animals
-        .filter((animal) => !experienced.has(animal.taxonId))
-        .map((a) => a.scientificName)
+      const newTaxa =
+        experienced &&
+        animals.filter((animal) => !experienced.has(animal.taxonId)).map((animal) => animal.scientificName)
       const base: BathFacts = {
         at: at.toISOString(),
         zone,
@@ -80,7 +83,9 @@ export function createBathFactsReader(parts: BathFactsParts) {
           inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
           unwellPercent: unknown(),
           handledInLast24h: unknown(),
-          withoutExperience: known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here'),
+          withoutExperience: newTaxa
+            ? known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here')
+            : unknown(),
         },
         volume: { determination: volumeFact(water) },
         lifeSupport: {
@@ -97,9 +102,10 @@ export function createBathFactsReader(parts: BathFactsParts) {
             at.toISOString(),
             'the orders',
           ),
-          givenInLast24hMgPerL: given.unclear
-            ? unknown()
-            : known(given.totalMgPerL, at.toISOString(), 'the doses recorded here'),
+          givenInLast24hMgPerL:
+            given && !given.unclear
+              ? known(given.totalMgPerL, at.toISOString(), 'the doses recorded here')
+              : unknown(),
           reducerInUse: unknown(),
         },
       }

@@ -68,6 +68,7 @@ export function createOrders(parts: OrdersOutside) {
     ...parts,
     course,
     ...situation,
+    hasWater: (enclosureId) => parts.water.questions.hasWaterAt(enclosureId, now()),
     enclosureName: async (id) => (await placeReads.readEnclosure(dataSource, { id }))?.name ?? '',
   })
   const queries = createOrderQueries({ dataSource, signing, now })

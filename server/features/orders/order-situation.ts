@@ -72,6 +72,10 @@ export function chosenOf(product: Product, line: DoseLine | null, lotId: string 
   }
 }
 
+/** The refusal of an enclosure that is not there or that nothing can be dissolved in. */
+export const noWaterProblem = () =>
+  new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
+
 /** Reads the facts of an instant and judges the order by them: the one way, while writing, at signing and at the dose. */
 export async function readSituation(
   parts: SituationParts,
@@ -81,10 +85,8 @@ export async function readSituation(
 ): Promise<OrderSituation> {
   const product = fields.productId === null ? null : await parts.product(fields.productId)
   const line = fields.doseLineId === null ? null : await parts.doseLine(fields.doseLineId)
-  const agent = product?.agent ?? 'sodium-chloride'
-  const situation = await parts.facts.read(fields.enclosureId, agent, at, options)
-  if (!situation)
-    throw new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
+  const situation = await parts.facts.read(fields.enclosureId, product?.agent ?? null, at, options)
+  if (!situation) throw noWaterProblem()
   const judgement = product
     ? judgeBathOrder(
         situation.base,

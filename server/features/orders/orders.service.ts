@@ -16,7 +16,7 @@ import type { SigningService } from '../signing/index.ts'
 import { contentOf } from './order-content.ts'
 import type { Override } from './order-content.ts'
 import type { OrderEventRow, OrderHead } from './order.entity.ts'
-import { missingFields, missingProblem, readSituation } from './order-situation.ts'
+import { missingFields, missingProblem, noWaterProblem, readSituation } from './order-situation.ts'
 import type { OrderSituation, SituationParts } from './order-situation.ts'
 import type { CourseReporter } from './report-course.ts'
 import * as repository from './orders.repository.ts'
@@ -28,6 +28,8 @@ export interface OrdersParts extends SituationParts {
   facility: FacilityService
   signing: SigningService
   enclosureName(id: string): Promise<string>
+  /** Whether there is such an enclosure and it has water now. */
+  hasWater(enclosureId: string): Promise<boolean>
   course: CourseReporter
 }
 
@@ -122,10 +124,7 @@ export function createOrdersService(parts: OrdersParts) {
       id: string,
       fields: BathOrderFields,
     ): Promise<{ number: string }> {
-      await parts.facts.read(fields.enclosureId, 'sodium-chloride', parts.clock.now()).then((found) => {
-        if (!found)
-          throw new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
-      })
+      if (!(await parts.hasWater(fields.enclosureId))) throw noWaterProblem()
       return parts.transactions.inTransaction(context, async (tx) => {
         const earlier = await repository.findOrderById(tx, id)
         if (earlier) {

@@ -46,6 +46,19 @@ export function pickLatest(rows: readonly ReadingReadRow[], ownBodyId: string): 
   return [...best.values()]
 }
 
+/** Which bodies an enclosure shares its water with at an instant, with the map of then; null when it had no water. */
+export async function readConnectedWater(
+  db: Db,
+  enclosure: Pick<EnclosureReadRow, 'water_body_id'>,
+  at: Date,
+): Promise<{ map: WaterMapRows; water: ConnectedWater; ownBodyId: string } | null> {
+  const ownBodyId = enclosure.water_body_id
+  if (ownBodyId === null) return null
+  const map = await readWaterMapAt(db, at)
+  const found = findConnectedWater(map.map, ownBodyId, at.toISOString())
+  return found.ok ? { map, water: found.value, ownBodyId } : null
+}
+
 /**
  * Reads the water of an enclosure at an instant; null when the enclosure had none then (a land area, or an instant
  * before it was taken into use).
@@ -55,12 +68,9 @@ export async function readEnclosureWater(
   enclosure: EnclosureReadRow,
   at: Date,
 ): Promise<EnclosureWater | null> {
-  const ownBodyId = enclosure.water_body_id
-  if (ownBodyId === null) return null
-  const map = await readWaterMapAt(db, at)
-  const found = findConnectedWater(map.map, ownBodyId, at.toISOString())
-  if (!found.ok) return null
-  const water = found.value
+  const found = await readConnectedWater(db, enclosure, at)
+  if (!found) return null
+  const { map, water, ownBodyId } = found
   const here = new Set(water.waterBodyIds)
   const ids = water.waterBodyIds
   const isolations = await readIsolations(db, { waterBodyIds: ids })

@@ -1,7 +1,9 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/water-map.contract.ts'
+import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { listConnectedWaters } from '../../../shared/domain/connections/connected-water.ts'
 import { waterDetails } from '../../../shared/messages/water.ts'
+import type { AuditDraft } from '../../platform/audit/append-to-chain.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -13,15 +15,70 @@ import { recordedStamps } from './recorded-stamps.ts'
 import { readIsolations } from './volumes.reads.ts'
 import * as repository from './water.repository.ts'
 
-const startOf = (tx: Tx, given: string | undefined) =>
-  given ? timeNotAhead(given, tx.at, '/inUseFrom') : tx.at
-const labelled = (kind: string, row: { id: string; code: string }) => ({ kind, id: row.id, label: row.code })
+type Thing = { id: string; code: string; name: string; inUseUntil: Date | null }
+type Stamps = Awaited<ReturnType<typeof recordedStamps>>
+type Created = Promise<{ created: boolean }>
+const labelled = (kind: string, row: Pick<Thing, 'id' | 'code'>) => ({ kind, id: row.id, label: row.code })
+
+const isolationSubject = (id: string, of: { codes: readonly string[] }) => ({
+  kind: 'isolation',
+  id,
+  label: of.codes.join(', '),
+})
 
 /** Valves, pumps and machines with their ledgers, and isolations. */
 export function createWaterMapService(parts: WaterServiceParts) {
   const { facility } = parts
   const { checkMayConfigure, lockWaterBodies } = parts.enclosures.service
   const inTransaction = parts.transactions.inTransaction.bind(parts.transactions)
+
+  /** A new valve, pump or machine as it stands in its table. */
+  const newThing = (
+    tx: Tx,
+    given: { id: string; code: string; name: string; inUseFrom?: string | undefined },
+  ) => ({
+    id: given.id,
+    code: given.code,
+    name: given.name,
+    inUseFrom: given.inUseFrom ? timeNotAhead(given.inUseFrom, tx.at, '/inUseFrom') : tx.at,
+    inUseUntil: null,
+    recordedAt: tx.at,
+    recordedBy: tx.actor.personId,
+    version: 1,
+  })
+
+  /** Corrects the name of a valve, pump or machine, or says until when it was in use. */
+  async function correctThing(
+    tx: Tx,
+    kind: 'connection' | 'life-support',
+    before: Thing | null,
+    given: BodyOf<typeof contracts.correctConnection | typeof contracts.correctLifeSupport>,
+    save: typeof repository.saveConnection,
+  ): Promise<void> {
+    checkMayConfigure(tx)
+    if (!before) throw new Problem('not-found')
+    const inUseUntil = given.inUseUntil ? timeNotAhead(given.inUseUntil, tx.at, '/inUseUntil') : null
+    const key = { id: before.id, version: given.expectedVersion }
+    await save(tx, key, { name: given.name, inUseUntil })
+    tx.audit({
+      action: `${kind}.correct`,
+      subject: labelled(kind, before),
+      before: { name: before.name, inUseUntil: before.inUseUntil?.toISOString() ?? null },
+      after: { name: given.name, inUseUntil: inUseUntil?.toISOString() ?? null },
+    })
+  }
+
+  /** Writes a fact of what is locked already into its ledger; into the audit trail unless it stood there before. */
+  async function recordFact(
+    tx: Tx,
+    given: { id: string; happenedAt: string },
+    insert: (fact: { id: string } & Stamps) => Created,
+    audit: Pick<AuditDraft, 'action' | 'subject'> & { after: Record<string, Json> },
+  ): Promise<void> {
+    const fact = { id: given.id, ...(await recordedStamps(tx, facility, given.happenedAt)) }
+    const { created } = await insert(fact)
+    if (created) tx.audit({ ...audit, after: { ...audit.after, happenedAt: fact.happenedAt.toISOString() } })
+  }
 
   /** The isolation; refused when there is none or it was struck through. */
   async function isolationOf(tx: Tx, id: string) {
@@ -43,20 +100,8 @@ export function createWaterMapService(parts: WaterServiceParts) {
         if (given.fromBodyId === given.toBodyId) throw new Problem('same-body-twice')
         const bodies = await lockWaterBodies(tx, [given.fromBodyId, given.toBodyId])
         if (bodies.length < 2) throw new Problem('not-found', { detail: waterDetails.bodyNotHere })
-        const inUseFrom = startOf(tx, given.inUseFrom)
-        const row = {
-          id: given.id,
-          code: given.code,
-          name: given.name,
-          kind: given.kind,
-          fromBodyId: given.fromBodyId,
-          toBodyId: given.toBodyId,
-          inUseFrom,
-          inUseUntil: null,
-          recordedAt: tx.at,
-          recordedBy: tx.actor.personId,
-          version: 1,
-        }
+        const { kind, fromBodyId, toBodyId } = given
+        const row = { ...newThing(tx, given), kind, fromBodyId, toBodyId }
         const { created } = await repository.insertConnection(tx, row)
         if (!created) return
         await repository.insertConnectionState(tx, {
@@ -64,7 +109,7 @@ export function createWaterMapService(parts: WaterServiceParts) {
           connectionId: row.id,
           open: given.open,
           note: null,
-          ...(await recordedStamps(tx, facility, inUseFrom.toISOString())),
+          ...(await recordedStamps(tx, facility, row.inUseFrom.toISOString())),
         })
         tx.audit({
           action: 'connection.enter',
@@ -85,21 +130,8 @@ export function createWaterMapService(parts: WaterServiceParts) {
       given: BodyOf<typeof contracts.correctConnection>,
     ): Promise<void> {
       await inTransaction(context, async (tx) => {
-        checkMayConfigure(tx)
         const before = await repository.lockConnection(tx, id)
-        if (!before) throw new Problem('not-found')
-        const inUseUntil = given.inUseUntil ? timeNotAhead(given.inUseUntil, tx.at, '/inUseUntil') : null
-        await repository.saveConnection(
-          tx,
-          { id, version: given.expectedVersion },
-          { name: given.name, inUseUntil },
-        )
-        tx.audit({
-          action: 'connection.correct',
-          subject: labelled('connection', before),
-          before: { name: before.name, inUseUntil: before.inUseUntil?.toISOString() ?? null },
-          after: { name: given.name, inUseUntil: inUseUntil?.toISOString() ?? null },
-        })
+        await correctThing(tx, 'connection', before, given, repository.saveConnection)
       })
     },
 
@@ -112,20 +144,13 @@ export function createWaterMapService(parts: WaterServiceParts) {
       await inTransaction(context, async (tx) => {
         const connection = await repository.lockConnection(tx, id)
         if (!connection) throw new Problem('not-found')
-        const stamps = await recordedStamps(tx, facility, given.happenedAt)
-        const { created } = await repository.insertConnectionState(tx, {
-          id: given.id,
-          connectionId: id,
-          open: given.open,
-          note: given.note ?? null,
-          ...stamps,
+        const { open, note = null } = given
+        const state = { connectionId: id, open, note }
+        await recordFact(tx, given, (fact) => repository.insertConnectionState(tx, { ...fact, ...state }), {
+          action: open ? 'connection.open' : 'connection.shut',
+          subject: labelled('connection', connection),
+          after: { note },
         })
-        if (created)
-          tx.audit({
-            action: given.open ? 'connection.open' : 'connection.shut',
-            subject: labelled('connection', connection),
-            after: { happenedAt: stamps.happenedAt.toISOString(), note: given.note ?? null },
-          })
       })
     },
 
@@ -136,19 +161,7 @@ export function createWaterMapService(parts: WaterServiceParts) {
       await inTransaction(context, async (tx) => {
         checkMayConfigure(tx)
         const body = await bodyOf(tx, parts, given.waterBodyId)
-        const inUseFrom = startOf(tx, given.inUseFrom)
-        const row = {
-          id: given.id,
-          code: given.code,
-          name: given.name,
-          kind: given.kind,
-          waterBodyId: body.id,
-          inUseFrom,
-          inUseUntil: null,
-          recordedAt: tx.at,
-          recordedBy: tx.actor.personId,
-          version: 1,
-        }
+        const row = { ...newThing(tx, given), kind: given.kind, waterBodyId: body.id }
         const { created } = await repository.insertLifeSupport(tx, row)
         if (!created) return
         await repository.insertLifeSupportState(tx, {
@@ -156,7 +169,7 @@ export function createWaterMapService(parts: WaterServiceParts) {
           unitId: row.id,
           isOn: given.on,
           note: null,
-          ...(await recordedStamps(tx, facility, inUseFrom.toISOString())),
+          ...(await recordedStamps(tx, facility, row.inUseFrom.toISOString())),
         })
         tx.audit({
           action: 'life-support.enter',
@@ -172,21 +185,8 @@ export function createWaterMapService(parts: WaterServiceParts) {
       given: BodyOf<typeof contracts.correctLifeSupport>,
     ): Promise<void> {
       await inTransaction(context, async (tx) => {
-        checkMayConfigure(tx)
         const before = await repository.lockLifeSupport(tx, id)
-        if (!before) throw new Problem('not-found')
-        const inUseUntil = given.inUseUntil ? timeNotAhead(given.inUseUntil, tx.at, '/inUseUntil') : null
-        await repository.saveLifeSupport(
-          tx,
-          { id, version: given.expectedVersion },
-          { name: given.name, inUseUntil },
-        )
-        tx.audit({
-          action: 'life-support.correct',
-          subject: labelled('life-support', before),
-          before: { name: before.name, inUseUntil: before.inUseUntil?.toISOString() ?? null },
-          after: { name: given.name, inUseUntil: inUseUntil?.toISOString() ?? null },
-        })
+        await correctThing(tx, 'life-support', before, given, repository.saveLifeSupport)
       })
     },
 
@@ -199,20 +199,13 @@ export function createWaterMapService(parts: WaterServiceParts) {
       await inTransaction(context, async (tx) => {
         const unit = await repository.lockLifeSupport(tx, id)
         if (!unit) throw new Problem('not-found')
-        const stamps = await recordedStamps(tx, facility, given.happenedAt)
-        const { created } = await repository.insertLifeSupportState(tx, {
-          id: given.id,
-          unitId: id,
-          isOn: given.on,
-          note: given.note ?? null,
-          ...stamps,
+        const { on, note = null } = given
+        const state = { unitId: id, isOn: on, note }
+        await recordFact(tx, given, (fact) => repository.insertLifeSupportState(tx, { ...fact, ...state }), {
+          action: on ? 'life-support.switch-on' : 'life-support.switch-off',
+          subject: labelled('life-support', unit),
+          after: { note },
         })
-        if (created)
-          tx.audit({
-            action: given.on ? 'life-support.switch-on' : 'life-support.switch-off',
-            subject: labelled('life-support', unit),
-            after: { happenedAt: stamps.happenedAt.toISOString(), note: given.note ?? null },
-          })
       })
     },
 
@@ -222,24 +215,31 @@ export function createWaterMapService(parts: WaterServiceParts) {
       given: BodyOf<typeof contracts.recordIsolation>,
     ): Promise<void> {
       await inTransaction(context, async (tx) => {
-        const stamps = await recordedStamps(tx, facility, given.happenedAt)
         const wanted = [...new Set(given.waterBodyIds)].sort()
         const bodies = await lockWaterBodies(tx, wanted)
         if (bodies.length < wanted.length)
           throw new Problem('not-found', { detail: waterDetails.bodyNotHere })
-        const { map } = await readWaterMapAt(tx.manager, stamps.happenedAt)
-        const waters = listConnectedWaters(map, stamps.happenedAt.toISOString())
-        if (!waters.ok || !waters.value.some((one) => wanted.every((id) => one.waterBodyIds.includes(id))))
-          throw new Problem('not-one-water')
-        const row = { id: given.id, note: given.note ?? null, ...stamps }
-        const { created } = await repository.insertIsolation(tx, row, wanted)
         const codes = bodies.map((body) => body.code).sort()
-        if (created)
-          tx.audit({
+        const note = given.note ?? null
+        await recordFact(
+          tx,
+          given,
+          async (fact) => {
+            const { map } = await readWaterMapAt(tx.manager, fact.happenedAt)
+            const waters = listConnectedWaters(map, fact.happenedAt.toISOString())
+            if (
+              !waters.ok ||
+              !waters.value.some((one) => wanted.every((id) => one.waterBodyIds.includes(id)))
+            )
+              throw new Problem('not-one-water')
+            return repository.insertIsolation(tx, { ...fact, note }, wanted)
+          },
+          {
             action: 'isolation.record',
-            subject: { kind: 'isolation', id: row.id, label: codes.join(', ') },
-            after: { bodies: codes, happenedAt: stamps.happenedAt.toISOString(), note: row.note },
-          })
+            subject: isolationSubject(given.id, { codes }),
+            after: { bodies: codes, note },
+          },
+        )
       })
     },
 
@@ -250,21 +250,13 @@ export function createWaterMapService(parts: WaterServiceParts) {
     ): Promise<void> {
       await inTransaction(context, async (tx) => {
         const isolation = await isolationOf(tx, isolationId)
-        const stamps = await recordedStamps(tx, facility, given.happenedAt)
         const { method, passed } = given
-        const { created } = await repository.insertIsolationTest(tx, {
-          id: given.id,
-          isolationId,
-          method,
-          passed,
-          ...stamps,
+        const test = { isolationId, method, passed }
+        await recordFact(tx, given, (fact) => repository.insertIsolationTest(tx, { ...fact, ...test }), {
+          action: 'isolation.test',
+          subject: isolationSubject(isolationId, isolation),
+          after: { method, passed },
         })
-        if (created)
-          tx.audit({
-            action: 'isolation.test',
-            subject: { kind: 'isolation', id: isolationId, label: isolation.codes.join(', ') },
-            after: { method, passed, happenedAt: stamps.happenedAt.toISOString() },
-          })
       })
     },
 
@@ -275,21 +267,17 @@ export function createWaterMapService(parts: WaterServiceParts) {
     ): Promise<void> {
       await inTransaction(context, async (tx) => {
         const isolation = await isolationOf(tx, isolationId)
-        const stamps = await recordedStamps(tx, facility, given.happenedAt)
-        if (stamps.happenedAt <= isolation.happened_at)
-          throw new Problem('period-reversed', { detail: waterDetails.endBeforeStart })
-        const { created } = await repository.insertIsolationEnd(tx, {
-          id: given.id,
-          isolationId,
-          note: given.note ?? null,
-          ...stamps,
-        })
-        if (created)
-          tx.audit({
-            action: 'isolation.end',
-            subject: { kind: 'isolation', id: isolationId, label: isolation.codes.join(', ') },
-            after: { happenedAt: stamps.happenedAt.toISOString(), note: given.note ?? null },
-          })
+        const note = given.note ?? null
+        await recordFact(
+          tx,
+          given,
+          (fact) => {
+            if (fact.happenedAt <= isolation.happened_at)
+              throw new Problem('period-reversed', { detail: waterDetails.endBeforeStart })
+            return repository.insertIsolationEnd(tx, { ...fact, isolationId, note })
+          },
+          { action: 'isolation.end', subject: isolationSubject(isolationId, isolation), after: { note } },
+        )
       })
     },
   }

@@ -15,7 +15,7 @@ import { readParameterSince } from './measurement.reads.ts'
 import { readWholeWaterMap } from './read-water-map.ts'
 import { readVolumeWork } from './volume-work.reads.ts'
 import { determinationOf } from './volume-now.ts'
-import { readEnclosureWater } from './water-at.ts'
+import { readConnectedWater, readEnclosureWater } from './water-at.ts'
 import type { EnclosureWater } from './water-at.ts'
 import { rangeOf } from './water.present.ts'
 
@@ -176,6 +176,11 @@ export function createWaterQuestions(parts: { dataSource: Db }) {
       const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
       const found = enclosure && (await readEnclosureWater(db, enclosure, at))
       return found && factsOf(found)
+    },
+    /** Whether there is such an enclosure and it has water at an instant. */
+    async hasWaterAt(enclosureId: string, at: Date, db: Db = parts.dataSource): Promise<boolean> {
+      const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
+      return enclosure !== null && (await readConnectedWater(db, enclosure, at)) !== null
     },
     /** Readings of one parameter in these bodies after `from` up to `until`, the newest first; void ones left out. */
     async recentReadings(

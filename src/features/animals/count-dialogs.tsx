@@ -3,6 +3,7 @@ import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { basisNames } from '../../../shared/messages/animals.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -12,7 +13,7 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { animalName } from './animal-name.ts'
 import { useAdjustCount, useRecordBirths, useStateCount } from './mutations.ts'
-import { RecordDialog, said, shortestReason, WhenField } from './record-dialog.tsx'
+import { RecordDialog, shortestReason, WhenField } from './record-dialog.tsx'
 import { wholeNumber } from './whole-number.ts'
 
 /** States what was counted or estimated; the ledger stays as it is. */
@@ -35,7 +36,7 @@ export function CountDialog({ animal, onBack }: { animal: Animal; onBack: () => 
       basis,
       low: figures.low,
       high: figures.high,
-      note: said(note),
+      note: typedText(note),
       happenedAt: when.instant,
     }
     if (!(await refusal.attempt(() => state.mutateAsync(body)))) return
@@ -114,7 +115,7 @@ export function BirthsDialog({ animal, onBack }: { animal: Animal; onBack: () =>
 
   const send = async () => {
     if (!count || when.instant === null) return
-    const body = { id, count, note: said(note), happenedAt: when.instant }
+    const body = { id, count, note: typedText(note), happenedAt: when.instant }
     if (!(await refusal.attempt(() => record.mutateAsync(body)))) return
     toast({ words: words.birthsRecorded({ count }) })
     onBack()

@@ -5,6 +5,7 @@ import type { CarcassPlace, CarcassState, DeathKind } from '../../../shared/doma
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { carcassPlaceNames, carcassStateNames, deathKindNames } from '../../../shared/messages/animals.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -14,7 +15,7 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { animalName } from './animal-name.ts'
 import { useRecordDeaths } from './mutations.ts'
-import { RecordDialog, said, WhenField } from './record-dialog.tsx'
+import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Records deaths as they were seen; more than the ledger has is kept, and said so before it is sent. */
 export function DeathsDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -42,7 +43,7 @@ export function DeathsDialog({ animal, onBack }: { animal: Animal; onBack: () =>
         count,
         carcassState: state || undefined,
         carcassPlace: place || undefined,
-        note: said(note),
+        note: typedText(note),
         happenedAt,
       })
       excess = death.excessCount

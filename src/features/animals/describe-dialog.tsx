@@ -7,6 +7,7 @@ import { animalWords } from '../../../shared/messages/animal-sheet.ts'
 import { sexNames, stageNames } from '../../../shared/messages/animals.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { SelectField } from '../../ui/select-field.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
@@ -14,7 +15,7 @@ import { useToast } from '../../ui/toast-context.ts'
 import { animalName } from './animal-name.ts'
 import { TaxonChooser } from './choose-taxon.tsx'
 import { useDescribeAnimal } from './mutations.ts'
-import { RecordDialog, said, WhenField } from './record-dialog.tsx'
+import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 const birthNames = () => ({
   hatched: animalWords.hatched,
@@ -42,11 +43,11 @@ export function DescribeDialog({ animal, onBack }: { animal: Animal; onBack: () 
     const body = {
       expectedVersion: animal.version,
       taxonId,
-      name: said(name) ?? null,
+      name: typedText(name) ?? null,
       sex,
       stage,
       birth: birthKind === '' ? null : { kind: birthKind, date: birthDate.trim(), approximate: about },
-      reason: said(reason),
+      reason: typedText(reason),
       happenedAt: when.instant,
     }
     if (!(await refusal.attempt(() => describe.mutateAsync(body)))) return

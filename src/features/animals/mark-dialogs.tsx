@@ -5,6 +5,7 @@ import type { IdentifierKind } from '../../../shared/domain/animals/description.
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { identifierKindNames } from '../../../shared/messages/animals.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { SelectField } from '../../ui/select-field.tsx'
@@ -13,7 +14,7 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { animalName } from './animal-name.ts'
 import { useAddIdentifier, useEndIdentifier } from './mutations.ts'
-import { RecordDialog, said, shortestReason, WhenField } from './record-dialog.tsx'
+import { RecordDialog, shortestReason, WhenField } from './record-dialog.tsx'
 
 /** Records a mark put on or read. One that another animal carries is asked back. */
 export function MarkDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -35,8 +36,8 @@ export function MarkDialog({ animal, onBack }: { animal: Animal; onBack: () => v
       id,
       kind,
       value: value.trim(),
-      place: said(place),
-      readTwiceReason: said(twice),
+      place: typedText(place),
+      readTwiceReason: typedText(twice),
       happenedAt: when.instant,
     }
     if (!(await refusal.attempt(() => add.mutateAsync(body)))) return

@@ -3,6 +3,7 @@ import { useQuery } from '@tanstack/react-query'
 import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -13,7 +14,7 @@ import { useToast } from '../../ui/toast-context.ts'
 import { animalName, countText } from './animal-name.ts'
 import { useMergeGroup } from './mutations.ts'
 import { animalListQuery } from './queries.ts'
-import { RecordDialog, said, WhenField } from './record-dialog.tsx'
+import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Puts an animal or group into another group of its taxon in the same enclosure. */
 export function MergeDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -37,7 +38,7 @@ export function MergeDialog({ animal, onBack }: { animal: Animal; onBack: () => 
     let ledger = 0
     const done = await refusal.attempt(async () => {
       const count = how === 'some' ? (some ?? undefined) : undefined
-      const reply = await merge.mutateAsync({ id, into, count, reason: said(reason), happenedAt })
+      const reply = await merge.mutateAsync({ id, into, count, reason: typedText(reason), happenedAt })
       ledger = reply.into.count.ledger
     })
     if (!done) return

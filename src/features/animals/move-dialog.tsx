@@ -4,6 +4,7 @@ import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { TextField } from '../../ui/text-field.tsx'
@@ -13,7 +14,7 @@ import { animalName } from './animal-name.ts'
 import { judgeMoveTo } from './move-form-model.ts'
 import { missingAnswer, MoveRuleFields, noAnswer, sentAnswer } from './move-rule-fields.tsx'
 import { useMoveAnimal } from './mutations.ts'
-import { RecordDialog, said, WhenField } from './record-dialog.tsx'
+import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Moves the whole animal or group. A move that a rule forbids can still be recorded as having happened. */
 export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -39,7 +40,7 @@ export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => v
         id,
         fromEnclosureId: place.id,
         toEnclosureId: to,
-        reason: said(reason),
+        reason: typedText(reason),
         ...sentAnswer(asks, answer),
         happenedAt,
       }),

@@ -73,6 +73,3 @@ export function WhenField({ when, wrong }: { when: Moment; wrong: string | undef
 }
 
 export const shortestReason = 3
-
-/** A text that may be left out: trimmed, and nothing when it is empty. */
-export const said = (text: string): string | undefined => text.trim() || undefined

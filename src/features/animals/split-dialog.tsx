@@ -4,6 +4,7 @@ import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -15,7 +16,7 @@ import { animalName } from './animal-name.ts'
 import { judgeMoveTo } from './move-form-model.ts'
 import { missingAnswer, MoveRuleFields, noAnswer, sentAnswer } from './move-rule-fields.tsx'
 import { useSplitGroup } from './mutations.ts'
-import { RecordDialog, said, WhenField } from './record-dialog.tsx'
+import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Takes one animal, or part of a group, out under a number of its own. */
 export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -47,8 +48,8 @@ export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => 
         form,
         count,
         toEnclosureId: to,
-        name: said(name),
-        reason: said(reason),
+        name: typedText(name),
+        reason: typedText(reason),
         ...sentAnswer(asks, answer),
         happenedAt,
       })

@@ -4,6 +4,7 @@ import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
 import { basisNames } from '../../../shared/messages/animals.ts'
 import { newId } from '../../lib/new-id.ts'
 import { usePreference } from '../../lib/preferences.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -14,7 +15,7 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { animalName } from './animal-name.ts'
 import { useRecordWeight } from './mutations.ts'
-import { RecordDialog, said, shortestReason, WhenField } from './record-dialog.tsx'
+import { RecordDialog, shortestReason, WhenField } from './record-dialog.tsx'
 import { judgeTypedWeight, weighUnits } from './weigh-form-model.ts'
 import { shownMassUnit } from './weight-text.ts'
 
@@ -58,8 +59,8 @@ export function WeighDialog({ animal, onBack }: { animal: Animal; onBack: () => 
         weight,
         animalsWeighed: together,
         basis,
-        method: said(method),
-        confirmedReason: asked === undefined ? undefined : said(confirmed),
+        method: typedText(method),
+        confirmedReason: asked === undefined ? undefined : typedText(confirmed),
         happenedAt,
       }),
     )

@@ -5,8 +5,9 @@ import { correctPerson } from '../../../shared/contracts/people.contract.ts'
 import type { Person } from '../../../shared/contracts/people.contract.ts'
 import { peopleWords } from '../../../shared/messages/people.ts'
 import { applyProblem } from '../../lib/apply-problem.ts'
-import { resolverOf } from '../../lib/resolver-of.ts'
+import { bodyResolver } from '../../lib/body-resolver.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
@@ -32,7 +33,11 @@ export function CorrectPersonForm({ person, onLoadNewer }: { person: Person; onL
   const [stale, setStale] = useState(false)
   const correct = useCorrectPerson(person.id)
   const form = useForm<Body>({
-    resolver: resolverOf(correctPerson),
+    resolver: bodyResolver(correctPerson.body, ({ email, printedName, ...typed }) => ({
+      ...typed,
+      email: typedText(email),
+      printedName: typedText(printedName),
+    })),
     defaultValues: bodyOf(person),
   })
   const { errors } = form.formState

@@ -4,9 +4,10 @@ import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import { enterLicence } from '../../../shared/contracts/people.contract.ts'
 import { peopleWords } from '../../../shared/messages/people.ts'
 import { applyProblem } from '../../lib/apply-problem.ts'
+import { bodyResolver } from '../../lib/body-resolver.ts'
 import { newId } from '../../lib/new-id.ts'
-import { resolverOf } from '../../lib/resolver-of.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
@@ -20,7 +21,13 @@ export function LicenceForm({ personId, onDone }: { personId: string; onDone: ()
   const [refused, setRefused] = useState<string | undefined>()
   const enter = useEnterLicence(personId)
   const form = useForm<Body>({
-    resolver: resolverOf(enterLicence),
+    resolver: bodyResolver(enterLicence.body, (typed) => ({
+      id: typed.id,
+      jurisdiction: typedText(typed.jurisdiction),
+      number: typedText(typed.number),
+      validFrom: typedText(typed.validFrom),
+      validUntil: typedText(typed.validUntil),
+    })),
     defaultValues: { id, jurisdiction: '', number: '', validFrom: '', validUntil: '' },
   })
   const { errors } = form.formState

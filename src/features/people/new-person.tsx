@@ -4,10 +4,11 @@ import { enterPerson } from '../../../shared/contracts/people.contract.ts'
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import { peopleWords } from '../../../shared/messages/people.ts'
 import { applyProblem } from '../../lib/apply-problem.ts'
+import { bodyResolver } from '../../lib/body-resolver.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
-import { resolverOf } from '../../lib/resolver-of.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
@@ -27,7 +28,11 @@ export function NewPerson() {
   const [refused, setRefused] = useState<string | undefined>()
   const enter = useEnterPerson()
   const form = useForm<Body>({
-    resolver: resolverOf(enterPerson),
+    resolver: bodyResolver(enterPerson.body, ({ email, printedName, ...typed }) => ({
+      ...typed,
+      email: typedText(email),
+      printedName: typedText(printedName),
+    })),
     defaultValues: { id, email: '', printedName: '', roles: [] },
   })
   const { errors } = form.formState

@@ -7,6 +7,7 @@ import { waterEventNames } from '../../../shared/messages/water.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { newId } from '../../lib/new-id.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
+import { useMoment } from '../../lib/use-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { ChoiceField } from '../../ui/choice-field.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
@@ -15,7 +16,6 @@ import { SelectField } from '../../ui/select-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { MomentAndNote } from './moment-and-note.tsx'
 import { useRecordWaterEvent } from './mutations.ts'
-import { useMoment } from './use-moment.ts'
 
 const volumeUnits = [{ unit: 'L' }, { unit: 'm3', label: 'm³' }, { unit: 'gal_us', label: 'US gal' }]
 

@@ -3,11 +3,11 @@ import type { ReactNode } from 'react'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { newId } from '../../lib/new-id.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { useMoment } from '../../lib/use-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { MomentAndNote } from './moment-and-note.tsx'
-import { useMoment } from './use-moment.ts'
 
 /** What a dialog about a valve or machine sends. The id stays the same when it has to be sent again. */
 export interface StateEntry {
