@@ -3,7 +3,7 @@ import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
-import { presentOrderRow, signedZone } from './orders.present.ts'
+import { presentOrderRow, signedContent, signedZone } from './orders.present.ts'
 import { readOrders } from './orders.reads.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
@@ -32,9 +32,17 @@ export function openOrders(rows: readonly OrderReadRow[], now: string) {
       timed: row.contact_minutes !== null,
       zone: signedZone(row),
     }
-    return [{ row: shown, plan }]
+    return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
   })
 }
+
+/** Whether the signed text asks for a second calculation, at a caution or at a condition. */
+function asksForSecond(row: OrderReadRow): boolean {
+  const content = signedContent(row)
+  const said = [...(content?.cautions ?? []), ...(content?.conditions ?? [])]
+  return said.some(({ secondCalculation }) => secondCalculation)
+}
+
 export type OpenOrder = ReturnType<typeof openOrders>[number]
 
 /**

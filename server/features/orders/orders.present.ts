@@ -60,7 +60,7 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
 }
 
 /** What the signature says, read for showing; columns beside the text are never shown in its place. */
-const signedContent = (row: OrderReadRow): SignedOrder | null => signedText(row)?.content ?? null
+export const signedContent = (row: OrderReadRow): SignedOrder | null => signedText(row)?.content ?? null
 
 export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
   const standing = standingOfRow(row)

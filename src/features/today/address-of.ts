@@ -13,14 +13,14 @@ const toCaseOrPlace = (told: Params) =>
   told('case') === '' ? paths.enclosure(told('enclosure')) : paths.quarantineCase(told('case'))
 
 const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
-  'urgent-call': toCaseOrPlace,
+  'urgent-call': (told) => paths.urgentCall(told('noticeId')),
   'own-licence': () => paths.ownSettings(),
   'observation-flagged': toCaseOrPlace,
   'order-held': toOrder,
   'case-held': toCase,
   'order-proposed': toOrder,
   'order-draft': toOrder,
-  'case-ready': toCase,
+  'case-ready': (told) => paths.clearCase(told('case')),
   'dose-exceptions': toDose,
   'discrepancy-veterinarian': toAnimal,
   'bath-running': toDose,

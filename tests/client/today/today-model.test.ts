@@ -139,7 +139,7 @@ describe('the address of the work', () => {
     expect(addressOfWork(someWork('volume-to-confirm', { params: { enclosure: 'KH 1' } }))).toBe(
       '/enclosures/KH%201/volumes',
     )
-    expect(addressOfWork(someWork('urgent-call', { params: { enclosure: 'KH-1' } }))).toBe('/enclosures/KH-1')
+    expect(addressOfWork(someWork('urgent-call', { params: { noticeId: 'n-1' } }))).toBe('/urgent/n-1')
   })
   it('is known for every kind', () => {
     for (const kind of todayKindNames) expect(addressOfWork(someWork(kind)), kind).toMatch(/^\//)
