@@ -1,7 +1,6 @@
 import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import type { listDueDoses } from '../../../shared/contracts/doses.contract.ts'
 import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
-import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
@@ -33,7 +32,7 @@ export async function findDueDoses(
   const found: DueDose[] = []
   for (const { row, plan } of orders) {
     const records = byOrder.get(row.id) ?? []
-    const planned = plannedDoses(plan, plan.zone)
+    const { planned } = plan
     const states = listDoseStates(planned, records.map(recordOf), { timed: plan.timed, ended: false }, now)
     for (const [i, dose] of planned.entries()) {
       const state = states[i]

@@ -1,9 +1,8 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
-import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
-import { presentOrderRow, signedContent, signedZone } from './orders.present.ts'
+import { plannedOf, presentOrderRow, signedContent } from './orders.present.ts'
 import { readOrders } from './orders.reads.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
@@ -25,13 +24,7 @@ export function openOrders(rows: readonly OrderReadRow[], now: string) {
     const shown = presentOrderRow(row, now)
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
     if (!isOpen || row.starts_at === null || row.doses === null) return []
-    const plan = {
-      startsAt: row.starts_at.toISOString(),
-      doses: row.doses,
-      intervalHours: row.interval_hours,
-      timed: row.contact_minutes !== null,
-      zone: signedZone(row),
-    }
+    const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
     return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
   })
 }
@@ -54,15 +47,13 @@ export async function readOrderWork(
   now: string,
 ): Promise<{ waiting: OrderWork[]; open: OpenOrder[] }> {
   const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
-  const open = openOrders(rows, now)
-  return { waiting: waitingOrders(rows, holds, now, open), open }
+  return { waiting: waitingOrders(rows, holds, now), open: openOrders(rows, now) }
 }
 
 function waitingOrders(
   rows: readonly OrderReadRow[],
   holds: readonly StandingHoldRow[],
   now: string,
-  open: readonly OpenOrder[],
 ): OrderWork[] {
   return rows.flatMap((row): OrderWork[] => {
     const order = presentOrderRow(row, now)
@@ -78,12 +69,8 @@ function waitingOrders(
         hold: hold
           ? { reason: hold.reason, at: hold.happened_at.toISOString(), by: hold.by_name ?? '' }
           : null,
-        lastWindowUntil: lastWindowOf(open.find((one) => one.row.id === row.id)),
+        lastWindowUntil: plannedOf(row).at(-1)?.closesAt ?? null,
       },
     ]
   })
-}
-
-function lastWindowOf(order: OpenOrder | undefined): string | null {
-  return order ? (plannedDoses(order.plan, order.plan.zone).at(-1)?.closesAt ?? null) : null
 }

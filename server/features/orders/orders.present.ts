@@ -13,34 +13,37 @@ interface SignedText {
   signedBy?: { zone?: string }
 }
 
-/** Signed texts are long, and a list asks each several things. */
-const readTexts = new WeakMap<OrderReadRow, SignedText | null>()
+/** What is made of a row only once: a list asks each of its rows several things, and some cost much. */
+function oncePerRow<T>(make: (row: OrderReadRow) => T): (row: OrderReadRow) => T {
+  const made = new WeakMap<OrderReadRow, { value: T }>()
+  return (row) => {
+    const kept = made.get(row) ?? { value: make(row) }
+    made.set(row, kept)
+    return kept.value
+  }
+}
 
 /** The signed text of a row; null where there is none, or where it is no longer readable. */
-function signedText(row: OrderReadRow): SignedText | null {
-  const known = readTexts.get(row)
-  if (known !== undefined) return known
-  let text: SignedText | null = null
+const signedText = oncePerRow((row): SignedText | null => {
   try {
-    text = row.signed_text === null ? null : (JSON.parse(row.signed_text) as SignedText)
+    return row.signed_text === null ? null : (JSON.parse(row.signed_text) as SignedText)
   } catch {
     // altered in the database: the screens that show the signature say so
+    return null
   }
-  readTexts.set(row, text)
-  return text
-}
+})
 
 /** What the signature froze beside the content: the zone by whose clock the doses were planned. */
 export const signedZone = (row: OrderReadRow): string => signedText(row)?.signedBy?.zone ?? 'UTC'
 
 /** The doses that the signed version in force plans; none for a draft. */
-export function plannedOf(row: OrderReadRow): PlannedDose[] {
+export const plannedOf = oncePerRow((row): PlannedDose[] => {
   if (!row.starts_at || row.doses === null) return []
   return plannedDoses(
     { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours },
     signedZone(row),
   )
-}
+})
 
 function standingOfRow(row: OrderReadRow): OrderStanding {
   const signed = plannedOf(row)
