@@ -101,6 +101,7 @@ export const BathSheet = z.object({
       }),
     )
     .describe('Lots of the product'),
+  lotId: RecordId.nullable().describe('Lot that it is worked out for; null: none chosen yet'),
   targetText: z.string().describe('Signed target with its basis'),
   contactMinutes: z.number().nullable().describe('Contact time in minutes; null: left in the water'),
   stopIf: z.string().describe('When the bath is stopped at once'),
@@ -131,7 +132,7 @@ export const BathSheet = z.object({
         help: z.string().nullable().describe('What was found'),
         resolve: z.array(z.string()).describe('What would resolve it'),
         place: z
-          .enum(['readings', 'volume', 'water', 'second-calculation'])
+          .enum(['readings', 'volume', 'water', 'lot', 'second-calculation'])
           .nullable()
           .describe('Where in the application it is resolved; null where it is done at the tank'),
       }),

@@ -38,6 +38,7 @@ const sheetRoutes: RouteObject[] = [
   { path: 'orders/new', lazy: () => import('./routes/orders/new-order.tsx') },
   { path: 'orders/:number/edit', lazy: () => import('./routes/orders/edit-order.tsx') },
   { path: 'orders/:number', lazy: () => import('./routes/orders/order.tsx') },
+  { path: 'orders/:number/sheet', lazy: () => import('./routes/orders/sheet.tsx') },
   { path: 'settings/own', lazy: () => import('./routes/own-settings.tsx') },
   { path: 'settings/people', lazy: () => import('./routes/people.tsx') },
   { path: 'settings/people/new', lazy: () => import('./routes/new-person.tsx') },

@@ -212,6 +212,9 @@ const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['p
   'uv-off': 'water',
   'fractionator-off': 'water',
   'determine-volume': 'volume',
+  'look-at-the-bottle': 'lot',
+  'use-other-lot': 'lot',
+  'record-lot': 'lot',
   'calculate-again-by-another': 'second-calculation',
 }
 
@@ -265,6 +268,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
       state,
       expiresOn,
     })),
+    lotId: hide ? null : (first?.lot_id ?? fields.lotId),
     targetText: `${content.targetText} ${content.basisText}`,
     contactMinutes: course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,

@@ -1,0 +1,95 @@
+import { useQuery } from '@tanstack/react-query'
+import { Navigate } from 'react-router-dom'
+import type { UseQueryResult } from '@tanstack/react-query'
+import type { BathSheet as BathSheetReply } from '../../../shared/contracts/doses.contract.ts'
+import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { useMe } from '../../lib/me.ts'
+import { paths } from '../../lib/paths.ts'
+import { isProblem } from '../../lib/problem-error.ts'
+import { ButtonLink } from '../../ui/button-link.tsx'
+import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { PhoneSheet } from '../../ui/phone-frame.tsx'
+import { sheetQuery } from './queries.ts'
+import { SecondCalculation } from './second-calculation.tsx'
+import { doseToOpen, nextAct, sheetMode } from './sheet-model.ts'
+import type { SheetPart } from './sheet-model.ts'
+import { StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
+import { WholeSheet } from './whole-sheet.tsx'
+
+/** While a second person calculates or a bath runs, somebody else may act at any moment. */
+const lookAgainMs = 5_000
+
+/**
+ * The bath sheet of one planned dose. The sheet without amounts is read first: whoever may be the second person is shown
+ * that one, and the amounts do not reach their device.
+ */
+export function BathSheet({ number, doseKey, part }: { number: string; doseKey: string; part: SheetPart }) {
+  const { zone } = useMe().facility
+  const blind = useQuery(sheetQuery(number, doseKey, true))
+  const mode = blind.data ? sheetMode(blind.data, part) : null
+  const whole = useQuery({
+    ...sheetQuery(number, doseKey, false),
+    enabled: mode === 'whole',
+    refetchInterval: ({ state }) => {
+      const act = state.data ? nextAct(state.data) : null
+      return act === 'wait-for-second' || act === 'running' ? lookAgainMs : false
+    },
+  })
+  const query = mode === 'whole' ? whole : blind
+  if (!query.data) return <NotYet number={number} query={query} />
+  if (mode === 'blind') return <BlindSheet sheet={query.data} zone={zone} />
+  return (
+    <WholeSheet
+      key={`${number} ${doseKey}`}
+      sheet={query.data}
+      zone={zone}
+      receivedMs={query.dataUpdatedAt}
+      onLookAgain={() => void query.refetch()}
+    />
+  )
+}
+
+/** The sheet of an order without a dose in its address: leads to the dose that is meant now. */
+export function DoseOfNow({ number }: { number: string }) {
+  const query = useQuery(sheetQuery(number, '1', true))
+  if (!query.data) return <NotYet number={number} query={query} />
+  const key = doseToOpen(query.data.calendar) ?? '1'
+  return <Navigate to={`${paths.orderSheet(number)}?dose=${key}`} replace />
+}
+
+function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
+  return (
+    <PhoneSheet
+      back={{ to: paths.order(sheet.number), label: words.backToOrder({ number: sheet.number }) }}
+      title={words.blindTitle}
+      under={words.under({ number: sheet.number, key: sheet.key, doses: sheet.doses })}
+    >
+      <SecondCalculation sheet={sheet} zone={zone} />
+      <WhatGoesIn sheet={sheet} zone={zone} />
+      <StopCriteria sheet={sheet} />
+    </PhoneSheet>
+  )
+}
+
+function NotYet({ number, query }: { number: string; query: UseQueryResult<BathSheetReply> }) {
+  const problem = isProblem(query.error) ? query.error : null
+  const missing = problem?.code === 'not-found' || problem?.code === 'bad-input'
+  return (
+    <PhoneSheet
+      back={{ to: paths.order(number), label: words.backToOrder({ number }) }}
+      title={words.sheetOf({ number })}
+    >
+      {problem ? (
+        <ListUnreadable
+          {...(missing ? { title: words.noSuchDose } : {})}
+          why={problem.says}
+          code={problem.requestId}
+          onRetry={() => void query.refetch()}
+          act={<ButtonLink to={paths.order(number)}>{words.backToOrder({ number })}</ButtonLink>}
+        />
+      ) : (
+        <ListFetching what={number} />
+      )}
+    </PhoneSheet>
+  )
+}

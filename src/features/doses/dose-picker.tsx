@@ -1,0 +1,51 @@
+import { Link } from 'react-router-dom'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { paths } from '../../lib/paths.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
+import { StepPicture } from '../../ui/step-mark.tsx'
+import type { StepState } from '../../ui/step-mark.tsx'
+
+type Dose = BathSheet['calendar'][number]
+
+const marks: Record<Dose['state'], StepState> = {
+  coming: 'to-come',
+  due: 'due',
+  late: 'overdue',
+  running: 'due',
+  given: 'done',
+  withheld: 'failed',
+  refused: 'failed',
+  'not-given': 'failed',
+}
+
+const stateWords = (state: Dose['state']) =>
+  state === 'due' ? words.dueState : state === 'given' ? words.givenState : words[state]
+
+/** Every planned dose of the order with its state; each leads to its sheet. */
+export function DosePicker({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  if (sheet.calendar.length < 2) return null
+  return (
+    <nav aria-label={words.doses} className="dose-picker">
+      <ol>
+        {sheet.calendar.map((dose) => (
+          <li key={dose.key}>
+            <Link
+              to={`${paths.orderSheet(sheet.number)}?dose=${dose.key}`}
+              aria-current={dose.key === sheet.key ? 'true' : undefined}
+            >
+              <StepPicture state={marks[dose.state]} />
+              <span>
+                {words.doseLine({
+                  key: dose.key,
+                  at: sayMoment(dose.dueAt, zone, sheet.now),
+                  state: stateWords(dose.state),
+                })}
+              </span>
+            </Link>
+          </li>
+        ))}
+      </ol>
+    </nav>
+  )
+}

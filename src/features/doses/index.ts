@@ -1,0 +1,1 @@
+export { BathSheet, DoseOfNow } from './bath-sheet.tsx'

@@ -1,0 +1,154 @@
+import { useState } from 'react'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
+import { unitOf } from '../../../shared/domain/units/unit-of.ts'
+import { secondWords as words } from '../../../shared/messages/doses-screens.ts'
+import { newId } from '../../lib/new-id.ts'
+import { paths } from '../../lib/paths.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
+import { useRefusal } from '../../lib/use-refusal.ts'
+import { Button } from '../../ui/button.tsx'
+import { ButtonLink } from '../../ui/button-link.tsx'
+import { CautionBlock } from '../../ui/caution-block.tsx'
+import { QuantityField } from '../../ui/quantity-field.tsx'
+import { TextField } from '../../ui/text-field.tsx'
+import { useToast } from '../../ui/toast-context.ts'
+import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { useCalculateSecond } from './mutations.ts'
+import { emptySecond, hasReadAll, secondBody, secondIsOpen, strengthUnits } from './second-form-model.ts'
+import { amountUnits, secondIsShut } from './sheet-model.ts'
+
+type Differs = NonNullable<BathSheet['second']>['differs'][number]
+
+const unitOptions = (units: readonly string[]) =>
+  units.map((unit) => ({ unit, label: isUnitCode(unit) ? unitOf(unit).symbol : unit }))
+
+const differsWords = (part: Differs) =>
+  ({
+    enclosure: words.enclosureDiffers,
+    lot: words.lotDiffers,
+    strength: words.strengthDiffers,
+    amount: words.amountDiffers,
+  })[part]
+
+/** The blind second calculation. Nothing of the first is here, neither drawn nor fetched. */
+export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  const { number, key, first } = sheet
+  const shut = secondIsShut(sheet)
+  return (
+    <>
+      <p className="t-note">
+        {first ? words.by({ by: first.by, at: sayMoment(first.at, zone, sheet.now) }) : null}
+      </p>
+      {shut === null ? (
+        <SecondForm sheet={sheet} />
+      ) : (
+        <section className="sheet-standing" role="status">
+          <h2 className="t-head">
+            {shut === 'same-person' ? words.samePerson : shut === 'no-first' ? words.noFirst : words.mayNot}
+          </h2>
+          <p>
+            {shut === 'same-person'
+              ? words.samePersonBody
+              : shut === 'no-first'
+                ? words.noFirstBody
+                : words.mayNotBody}
+          </p>
+        </section>
+      )}
+      <div className="stack">
+        <ButtonLink kind="plain" to={`${paths.orderSheet(number)}?dose=${key}&part=whole`}>
+          {words.whole}
+        </ButtonLink>
+        {shut === null ? <p className="t-note">{words.wholeNote}</p> : null}
+      </div>
+    </>
+  )
+}
+
+function SecondForm({ sheet }: { sheet: BathSheet }) {
+  const { number, key, second } = sheet
+  const units = amountUnits(sheet)
+  const [form, setForm] = useState(() => emptySecond(units[0] ?? 'g'))
+  const [id, setId] = useState(newId)
+  const calculate = useCalculateSecond({ number, key })
+  const refusal = useRefusal()
+  const say = useToast()
+  const shut = secondIsOpen(form)
+  const fault = second !== null && second.mine && !second.agrees ? second : null
+  const change = (next: Partial<typeof form>) => setForm({ ...form, ...next })
+
+  const send = async () => {
+    if (shut !== false) return
+    const done = await refusal.attempt(async () => {
+      const reply = await calculate.mutateAsync(secondBody(form, id))
+      setId(newId())
+      // begun again from the label: nothing of the last try stays
+      if (reply.second?.agrees) say({ words: words.agrees })
+      else setForm(emptySecond(units[0] ?? 'g'))
+    })
+    if (done) window.scrollTo(0, 0)
+  }
+
+  return (
+    <form
+      className="stack gap-4"
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault()
+        void send()
+      }}
+    >
+      {fault ? (
+        <div role="alert">
+          <CautionBlock level="stop" title={words.differs}>
+            {[...fault.differs.map(differsWords), words.differsBody].join(' ')}
+          </CautionBlock>
+        </div>
+      ) : null}
+      <p>{words.intro}</p>
+      <WrongSummary fields={[]} general={refusal.general(['/amount', '/strengthRead', '/enclosureRead'])} />
+      <TextField
+        label={words.enclosure}
+        value={form.enclosure}
+        maxLength={60}
+        autoComplete="off"
+        wrong={refusal.at('/enclosureRead')}
+        onChange={(event) => change({ enclosure: event.target.value })}
+      />
+      <TextField
+        label={words.mark}
+        value={form.mark}
+        maxLength={120}
+        autoComplete="off"
+        onChange={(event) => change({ mark: event.target.value })}
+      />
+      <QuantityField
+        label={words.strength}
+        units={unitOptions(strengthUnits)}
+        quantity={form.strength}
+        wrong={refusal.at('/strengthRead')}
+        onChange={(strength) => change({ strength })}
+      />
+      <TextField
+        label={words.lot}
+        value={form.lot}
+        maxLength={60}
+        autoComplete="off"
+        onChange={(event) => change({ lot: event.target.value })}
+      />
+      <QuantityField
+        label={words.amount}
+        hint={words.amountHint}
+        units={unitOptions(units)}
+        disabled={!hasReadAll(form)}
+        quantity={form.amount}
+        wrong={refusal.at('/amount')}
+        onChange={(amount) => change({ amount })}
+      />
+      <Button kind="primary" size="touch" type="submit" block disabled={refusal.busy} shut={shut}>
+        {words.act}
+      </Button>
+    </form>
+  )
+}

@@ -1,0 +1,110 @@
+import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+
+/** Which part of the sheet somebody came for, from the address. */
+export type SheetPart = 'second' | 'whole' | null
+
+/**
+ * Whether the sheet is shown without amounts: to whoever may be the second person, until the two agree or they say that
+ * they are not the one.
+ *
+ * @param blind the blind sheet
+ * @returns `blind` · `whole`: it has to be fetched with its amounts · `same`: nothing was left out, so this is the whole
+ */
+export function sheetMode(blind: BathSheet, part: SheetPart): 'blind' | 'whole' | 'same' {
+  if (!blind.blind) return 'same'
+  if (part === 'second') return 'blind'
+  const waits = blind.first !== null && !blind.first.mine && blind.secondNeeded && blind.state === 'due'
+  return waits && part !== 'whole' ? 'blind' : 'whole'
+}
+
+/** Why somebody cannot make the second calculation; null when they can. */
+export function secondIsShut(blind: BathSheet): 'no-first' | 'same-person' | 'may-not' | null {
+  if (blind.first === null) return 'no-first'
+  if (blind.first.mine) return 'same-person'
+  return blind.may.includes('dose.calculate-second') ? null : 'may-not'
+}
+
+/** What the sheet asks for next. */
+export type NextAct =
+  | 'closed'
+  /** Work the amount out with the lot in the hand. */
+  | 'calculate'
+  /** Another person calculates. */
+  | 'wait-for-second'
+  /** Conditions or cautions stand in the way. */
+  | 'resolve'
+  | 'give'
+  | 'running'
+  /** The agent was left in the water: somebody says when it is out. */
+  | 'in-the-water'
+  | 'done'
+
+/** The dose that went in and has no end yet; the newest first. */
+export function openRecord(sheet: BathSheet): RecordedDose | null {
+  return (
+    [...sheet.recorded]
+      .reverse()
+      .find(({ kind, stop }) => (kind === 'given' || kind === 'recorded') && stop === null) ?? null
+  )
+}
+
+/** Whether the two calculations are there and agree, as far as this dose needs them. */
+export function secondAgrees({ secondNeeded, first, second }: BathSheet): boolean {
+  if (!secondNeeded) return true
+  return first !== null && second?.agrees === true && second.at >= first.at
+}
+
+/** The one thing that the foot of the sheet offers. Stopping, holding and recording are always there beside it. */
+export function nextAct(sheet: BathSheet): NextAct {
+  if (sheet.state === 'running') return 'running'
+  if (sheet.state === 'done')
+    return sheet.contactMinutes === null && openRecord(sheet) !== null ? 'in-the-water' : 'done'
+  if (sheet.state !== 'due') return 'closed'
+  if (sheet.mayStart && sheet.first !== null) return 'give'
+  if (sheet.first === null) return 'calculate'
+  if (!secondAgrees(sheet))
+    return sheet.second !== null && sheet.second.at >= sheet.first.at && !sheet.second.agrees
+      ? 'calculate'
+      : 'wait-for-second'
+  return 'resolve'
+}
+
+/** Steps that still stand in the way, the second calculation aside: it has a place of its own. */
+export function openSteps(sheet: BathSheet): BathSheet['steps'] {
+  return sheet.steps.filter(({ state, place }) => state !== 'met' && place !== 'second-calculation')
+}
+
+/** Cautions that no step speaks of. */
+export function otherCautions(sheet: BathSheet): BathSheet['cautions'] {
+  const told = new Set(sheet.steps.map(({ ruleId }) => ruleId))
+  return sheet.cautions.filter(({ ruleId }) => !told.has(ruleId))
+}
+
+const byNeed: BathSheet['calendar'][number]['state'][] = ['running', 'late', 'due', 'coming', 'given']
+
+/** The dose that an address without one means: what runs, else what is late, due, or comes next. */
+export function doseToOpen(calendar: BathSheet['calendar']): string | null {
+  for (const state of byNeed) {
+    const found = state === 'given' ? calendar.at(-1) : calendar.find((dose) => dose.state === state)
+    if (found) return found.key
+  }
+  return calendar[0]?.key ?? null
+}
+
+/** The lot that a field opens on: the one of the calculation or the order, if it may still be used, else none. */
+export function lotToOpen(sheet: BathSheet): string {
+  return sheet.lots.find(({ id, state }) => id === sheet.lotId && state === 'usable')?.id ?? ''
+}
+
+/** Units that an amount is entered in, the one it was worked out in first. */
+export function amountUnits(sheet: Pick<BathSheet, 'amountNow' | 'form'>): string[] {
+  const usual = sheet.form === 'liquid' ? ['mL', 'L', 'g', 'kg'] : ['g', 'kg', 'mg', 'mL']
+  const own = sheet.amountNow?.unit
+  return own === undefined ? usual : [own, ...usual.filter((unit) => unit !== own)]
+}
+
+/** What stands in the way and is said nowhere else on the sheet: neither by a step nor by a caution. */
+export function restInTheWay(sheet: BathSheet): string[] {
+  const said = new Set(sheet.cautions.map(({ title, text }) => `${title}. ${text}`))
+  return sheet.why.filter((why) => !said.has(why))
+}

@@ -1,0 +1,142 @@
+import { OctagonX } from 'lucide-react'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
+import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
+import { Facts } from '../../ui/facts.tsx'
+import { Icon } from '../../ui/icon.tsx'
+import { PairOfAmounts } from '../../ui/pair-of-amounts.tsx'
+import { WorkingBlock } from '../../ui/working-block.tsx'
+import { DoseText } from '../orders/index.ts'
+import { otherCautions } from './sheet-model.ts'
+
+/** When the bath is stopped at once: on the sheet from the first look to the last. */
+export function StopCriteria({ sheet }: { sheet: BathSheet }) {
+  return (
+    <CautionBlock level="stop" title={words.stopIf}>
+      {sheet.stopIf}
+    </CautionBlock>
+  )
+}
+
+/** Held, ended or broken: said plainly, by whom, and what one may still do. */
+export function Standing({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  const { standing, state } = sheet
+  const broken = state === 'broken'
+  if (!standing && !broken) return null
+  const kind = standing?.kind
+  const heading = broken
+    ? words.isBroken
+    : kind === 'held'
+      ? words.isHeld
+      : kind === 'discontinued'
+        ? words.isDiscontinued
+        : kind === 'expired'
+          ? words.isExpired
+          : words.isCompleted
+  return (
+    <section className="sheet-standing" role="status">
+      <h2 className="t-head row">
+        {kind === 'completed' && !broken ? null : <Icon of={OctagonX} size={20} />}
+        {heading}
+      </h2>
+      {standing?.by && standing.at ? (
+        <p>{words.standingBy({ by: standing.by, at: sayMoment(standing.at, zone, sheet.now) })}</p>
+      ) : null}
+      {standing?.reason ? <p>{words.standingReason({ reason: standing.reason })}</p> : null}
+      {broken ? <p>{words.brokenNext}</p> : kind === 'held' ? <p>{words.liftBy}</p> : null}
+      {kind === 'completed' && !broken ? null : <p>{words.still}</p>}
+    </section>
+  )
+}
+
+/** What goes into which water, for how long and how; no amount. */
+export function WhatGoesIn({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  const at = (instant: string) => sayMoment(instant, zone, sheet.now)
+  const own = sheet.calendar.find((dose) => dose.key === sheet.key)
+  return (
+    <section className="stack">
+      <h2 className="t-head">{sheet.drug}</h2>
+      <Facts
+        of={[
+          [words.product, sheet.productName],
+          [words.target, sheet.targetText],
+          [
+            words.contact,
+            sheet.contactMinutes === null ? words.leftIn : formatDose(sheet.contactMinutes, 'min').text,
+          ],
+          ...(own
+            ? [
+                [
+                  words.due,
+                  words.dueText({ at: at(own.dueAt), from: at(own.opensAt), until: at(own.latestAt) }),
+                ] as const,
+              ]
+            : []),
+          ...(sheet.instructions === '' ? [] : [[words.how, sheet.instructions] as const]),
+        ]}
+      />
+    </section>
+  )
+}
+
+/** The signed amount and the one for the water now, never as one number, and the working of the second. */
+export function Amounts({ sheet }: { sheet: BathSheet }) {
+  const { signedAmountText, amountNowText, driftPercent, driftWithin } = sheet
+  const percent = formatDose(Number(Math.abs(driftPercent ?? 0).toFixed(1)), 'percent').text
+  const moved = driftPercent !== null && Math.abs(driftPercent) >= 0.05
+  const reason = !moved
+    ? signedAmountText === amountNowText
+      ? words.noDrift
+      : words.driftOther
+    : driftWithin
+      ? words.driftWithin({ percent })
+      : words.driftOutside({ percent })
+  return (
+    <section className="stack">
+      <h2 className="t-head">{words.amount}</h2>
+      {amountNowText === null ? (
+        <p className="t-strong">{words.amountNone}</p>
+      ) : (
+        <div className="sheet-amounts">
+          <PairOfAmounts
+            signed={<DoseText text={signedAmountText ?? ''} />}
+            signedWords={words.amountSigned}
+            recomputed={<DoseText text={amountNowText} />}
+            recomputedWords={words.amountNow}
+            reason={reason}
+          />
+        </div>
+      )}
+      {sheet.working.length > 0 ? (
+        <WorkingBlock
+          label={words.working}
+          rows={sheet.working.map((line, i) => ({
+            key: String(i),
+            what: line.label,
+            formula: line.shown,
+            result: line.result,
+            kind: i === sheet.working.length - 1 ? 'sum' : 'line',
+          }))}
+        />
+      ) : null}
+    </section>
+  )
+}
+
+/** Cautions that fire now and that no step speaks of, the gravest first. */
+export function CautionsNow({ sheet }: { sheet: BathSheet }) {
+  const cautions = sortCautions(otherCautions(sheet))
+  if (cautions.length === 0) return null
+  return (
+    <section className="stack">
+      <h2 className="t-head">{words.cautions}</h2>
+      {cautions.map((caution) => (
+        <CautionBlock key={`${caution.ruleId} ${caution.code}`} level={caution.level} title={caution.title}>
+          {[caution.text, ...caution.resolve].join(' ')}
+        </CautionBlock>
+      ))}
+    </section>
+  )
+}

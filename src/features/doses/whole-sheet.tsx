@@ -1,0 +1,254 @@
+import { useState } from 'react'
+import { Plus } from 'lucide-react'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { sheetWords as words, timerWords } from '../../../shared/messages/doses-screens.ts'
+import { newId } from '../../lib/new-id.ts'
+import { paths } from '../../lib/paths.ts'
+import { useRefusal } from '../../lib/use-refusal.ts'
+import { Button } from '../../ui/button.tsx'
+import { ButtonLink } from '../../ui/button-link.tsx'
+import { PhoneSheet } from '../../ui/phone-frame.tsx'
+import { useToast } from '../../ui/toast-context.ts'
+import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { DosePicker } from './dose-picker.tsx'
+import { FirstCalculation, SecondStanding } from './first-calculation.tsx'
+import { GiveForm } from './give-form.tsx'
+import { HoldDialog } from './hold-dialog.tsx'
+import { useCalculateFirst } from './mutations.ts'
+import { PrintLink } from './print-link.tsx'
+import { RecordDialog } from './record-dialog.tsx'
+import { RecordedDoses } from './recorded-doses.tsx'
+import { RunningSteps, RunningTime } from './running-bath.tsx'
+import { lotToOpen, nextAct, openRecord, openSteps, restInTheWay } from './sheet-model.ts'
+import type { NextAct } from './sheet-model.ts'
+import { Amounts, CautionsNow, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
+import { SheetSteps } from './sheet-steps.tsx'
+import { StopDialog } from './stop-dialog.tsx'
+import type { StopKind } from './stop-dialog.tsx'
+
+type Front = { stop: StopKind } | 'hold' | 'record' | null
+
+/** The sheet with its amounts: conditions, calculations, giving, the running bath, what was recorded. */
+export function WholeSheet({
+  sheet,
+  zone,
+  receivedMs,
+  onLookAgain,
+}: {
+  sheet: BathSheet
+  zone: string
+  receivedMs: number
+  onLookAgain: () => void
+}) {
+  const [front, setFront] = useState<Front>(null)
+  const [chosenLot, setChosenLot] = useState<string | null>(null)
+  const lotId = chosenLot ?? lotToOpen(sheet)
+  const act = nextAct(sheet)
+  const record = openRecord(sheet)
+  const running = act === 'running' && record !== null
+  const open = act === 'calculate' || act === 'wait-for-second' || act === 'resolve' || act === 'give'
+  return (
+    <>
+      <PhoneSheet
+        back={{ to: paths.order(sheet.number), label: words.backToOrder({ number: sheet.number }) }}
+        title={words.title({ enclosure: sheet.enclosureCode })}
+        under={
+          <>
+            {sheet.treated.join('; ')}
+            <br />
+            {words.under({ number: sheet.number, key: sheet.key, doses: sheet.doses })}
+          </>
+        }
+        banner={
+          running ? (
+            <RunningTime sheet={sheet} record={record} zone={zone} receivedMs={receivedMs} />
+          ) : undefined
+        }
+        foot={
+          <Foot
+            sheet={sheet}
+            act={act}
+            lotId={lotId}
+            doseId={record?.id ?? null}
+            onFront={setFront}
+            onLookAgain={onLookAgain}
+          />
+        }
+      >
+        <Standing sheet={sheet} zone={zone} />
+        <DosePicker sheet={sheet} zone={zone} />
+        {running ? <RunningSteps sheet={sheet} record={record} zone={zone} /> : null}
+        <StopCriteria sheet={sheet} />
+        <WhatGoesIn sheet={sheet} zone={zone} />
+        {open ? (
+          <>
+            <SheetSteps sheet={sheet} lotId={lotId === '' ? null : lotId} />
+            <CautionsNow sheet={sheet} />
+            <Amounts sheet={sheet} />
+            <FirstCalculation sheet={sheet} zone={zone} lotId={lotId} onLot={setChosenLot} />
+            <SecondStanding sheet={sheet} zone={zone} />
+            <InTheWay sheet={sheet} act={act} />
+            {act === 'give' && sheet.may.includes('dose.give') ? (
+              <GiveForm sheet={sheet} lotId={lotId} />
+            ) : null}
+          </>
+        ) : null}
+        <RecordedDoses sheet={sheet} zone={zone} />
+        <div className="row row-wrap">
+          {sheet.may.includes('dose.record') ? (
+            <Button onClick={() => setFront('record')}>{words.record}</Button>
+          ) : null}
+          <PrintLink number={sheet.number} doseKey={sheet.key} />
+        </div>
+      </PhoneSheet>
+      {front === 'hold' ? <HoldDialog number={sheet.number} onBack={() => setFront(null)} /> : null}
+      {front === 'record' ? <RecordDialog sheet={sheet} onBack={() => setFront(null)} /> : null}
+      {typeof front === 'object' && front !== null && record ? (
+        <StopDialog doseId={record.id} kind={front.stop} onBack={() => setFront(null)} />
+      ) : null}
+    </>
+  )
+}
+
+/** What keeps the dose from being given, where the steps and the calculations do not say it already. */
+function InTheWay({ sheet, act }: { sheet: BathSheet; act: NextAct }) {
+  const open = openSteps(sheet).filter(({ level }) => level === 'stop').length
+  const rest = restInTheWay(sheet)
+  if (act === 'give' || open + rest.length === 0) return null
+  return (
+    <section className="stack" aria-live="polite">
+      <h2 className="t-head">{words.inTheWay}</h2>
+      <ul className="in-the-way">
+        {open > 0 ? <li>{words.conditionsOpen({ count: open })}</li> : null}
+        {rest.map((why) => (
+          <li key={why}>{why}</li>
+        ))}
+      </ul>
+    </section>
+  )
+}
+
+/** Within reach of the thumb: the next act, holding, and, while a bath runs, stopping it. */
+function Foot({
+  sheet,
+  act,
+  lotId,
+  doseId,
+  onFront,
+  onLookAgain,
+}: {
+  sheet: BathSheet
+  act: NextAct
+  lotId: string
+  doseId: string | null
+  onFront: (front: Front) => void
+  onLookAgain: () => void
+}) {
+  const may = (action: string) => sheet.may.includes(action)
+  const mayHold = may('order.hold') && sheet.standing === null
+  const primary = (
+    <Primary sheet={sheet} act={act} lotId={lotId} onFront={onFront} onLookAgain={onLookAgain} />
+  )
+  const hold = mayHold ? (
+    <Button kind="hold" size="touch" onClick={() => onFront('hold')}>
+      {words.hold}
+    </Button>
+  ) : null
+  if (act === 'running')
+    return (
+      <>
+        <div className="foot-duo">
+          <ButtonLink
+            kind="primary"
+            size="touch"
+            icon={Plus}
+            to={paths.enclosureMeasure(sheet.enclosureCode)}
+          >
+            {timerWords.reading}
+          </ButtonLink>
+          {hold}
+        </div>
+        {may('bath.stop') && doseId !== null ? (
+          <div className="foot-duo">
+            <Button kind="stop" size="touch" onClick={() => onFront({ stop: 'stop' })}>
+              {timerWords.stop}
+            </Button>
+            <Button size="touch" onClick={() => onFront({ stop: 'end' })}>
+              {timerWords.end}
+            </Button>
+          </div>
+        ) : null}
+      </>
+    )
+  return (
+    <div className="foot-duo">
+      {primary}
+      {hold}
+    </div>
+  )
+}
+
+function Primary({
+  sheet,
+  act,
+  lotId,
+  onFront,
+  onLookAgain,
+}: {
+  sheet: BathSheet
+  act: NextAct
+  lotId: string
+  onFront: (front: Front) => void
+  onLookAgain: () => void
+}) {
+  if (act === 'calculate' && sheet.may.includes('dose.give'))
+    return <CalculateAct sheet={sheet} lotId={lotId} />
+  if (act === 'in-the-water' && sheet.may.includes('bath.stop'))
+    return (
+      <Button kind="primary" size="touch" onClick={() => onFront({ stop: 'out' })}>
+        {timerWords.out}
+      </Button>
+    )
+  if (act === 'give' && sheet.may.includes('dose.give'))
+    // the act itself stands below the amount that has to be typed
+    return (
+      <Button
+        size="touch"
+        kind="primary"
+        onClick={() => document.querySelector<HTMLInputElement>('.sheet-give input')?.focus()}
+      >
+        {words.give}
+      </Button>
+    )
+  if (act === 'done' || act === 'closed' || act === 'in-the-water') return <span />
+  return (
+    <Button size="touch" onClick={onLookAgain}>
+      {words.lookAgain}
+    </Button>
+  )
+}
+
+function CalculateAct({ sheet, lotId }: { sheet: BathSheet; lotId: string }) {
+  const calculate = useCalculateFirst({ number: sheet.number, key: sheet.key })
+  const refusal = useRefusal()
+  const say = useToast()
+  const send = async () => {
+    if (await refusal.attempt(() => calculate.mutateAsync({ id: newId(), lotId })))
+      say({ words: words.calculated })
+  }
+  return (
+    <div className="stack">
+      <WrongSummary fields={[]} general={refusal.general([])} />
+      <Button
+        kind="primary"
+        size="touch"
+        block
+        disabled={refusal.busy}
+        shut={lotId === '' ? words.chooseLot : false}
+        onClick={() => void send()}
+      >
+        {sheet.first === null ? words.firstAct : words.firstAgain}
+      </Button>
+    </div>
+  )
+}
