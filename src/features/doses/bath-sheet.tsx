@@ -11,9 +11,9 @@ import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { PhoneSheet } from '../../ui/phone-frame.tsx'
 import { sheetQuery } from './queries.ts'
 import { SecondCalculation } from './second-calculation.tsx'
-import { doseToOpen, nextAct, sheetMode } from './sheet-model.ts'
+import { doseToOpen, othersMayAct, sheetMode } from './sheet-model.ts'
 import type { SheetPart } from './sheet-model.ts'
-import { StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
+import { StopCriteria } from './sheet-parts.tsx'
 import { WholeSheet } from './whole-sheet.tsx'
 
 /** While a second person calculates or a bath runs, somebody else may act at any moment. */
@@ -30,10 +30,7 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   const whole = useQuery({
     ...sheetQuery(number, doseKey, false),
     enabled: mode === 'whole',
-    refetchInterval: ({ state }) => {
-      const act = state.data ? nextAct(state.data) : null
-      return act === 'wait-for-second' || act === 'running' ? lookAgainMs : false
-    },
+    refetchInterval: ({ state }) => (state.data && othersMayAct(state.data) ? lookAgainMs : false),
   })
   const query = mode === 'whole' ? whole : blind
   if (!query.data) return <NotYet number={number} query={query} />
@@ -65,7 +62,6 @@ function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
       under={words.under({ number: sheet.number, key: sheet.key, doses: sheet.doses })}
     >
       <SecondCalculation sheet={sheet} zone={zone} />
-      <WhatGoesIn sheet={sheet} zone={zone} />
       <StopCriteria sheet={sheet} />
     </PhoneSheet>
   )

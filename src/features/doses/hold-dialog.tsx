@@ -11,11 +11,11 @@ import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useHold } from './mutations.ts'
 
 /** Holds the order at once; a reason is welcome and not needed. */
-export function HoldDialog({ number, onBack }: { number: string; onBack: () => void }) {
+export function HoldDialog({ number, now, onBack }: { number: string; now: string; onBack: () => void }) {
   const hold = useHold(number)
   const refusal = useRefusal()
   const say = useToast()
-  const [given] = useState(() => ({ id: newId(), happenedAt: new Date().toISOString() }))
+  const [given] = useState(() => ({ id: newId(), happenedAt: now }))
   const [reason, setReason] = useState('')
   const send = async () => {
     const typed = typedText(reason)

@@ -24,10 +24,10 @@ import { amountUnits } from './sheet-model.ts'
 type Kind = 'recorded' | 'withheld' | 'refused'
 
 /** Records what happened with its own time, and the end of the bath where it has ended. Never refused for its content. */
-export function RecordDialog({ sheet, onBack }: { sheet: BathSheet; onBack: () => void }) {
+export function RecordDialog({ sheet, now, onBack }: { sheet: BathSheet; now: string; onBack: () => void }) {
   const { number, key } = sheet
   const units = amountUnits(sheet)
-  const when = useMoment()
+  const when = useMoment(now)
   const record = useRecordDose({ number, key })
   const stop = useStopBath()
   const refusal = useRefusal()

@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import type { ReactNode } from 'react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
@@ -17,6 +18,7 @@ import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useCalculateSecond } from './mutations.ts'
 import { emptySecond, hasReadAll, secondBody, secondIsOpen, strengthUnits } from './second-form-model.ts'
 import { amountUnits, secondIsShut } from './sheet-model.ts'
+import { WhatGoesIn } from './sheet-parts.tsx'
 
 type Differs = NonNullable<BathSheet['second']>['differs'][number]
 
@@ -33,6 +35,7 @@ const differsWords = (part: Differs) =>
 
 /** The blind second calculation. Nothing of the first is here, neither drawn nor fetched. */
 export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  const what = <WhatGoesIn sheet={sheet} zone={zone} />
   const { number, key, first } = sheet
   const shut = secondIsShut(sheet)
   return (
@@ -41,7 +44,7 @@ export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: str
         {first ? words.by({ by: first.by, at: sayMoment(first.at, zone, sheet.now) }) : null}
       </p>
       {shut === null ? (
-        <SecondForm sheet={sheet} />
+        <SecondForm sheet={sheet} what={what} />
       ) : (
         <section className="sheet-standing" role="status">
           <h2 className="t-head">
@@ -66,7 +69,7 @@ export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: str
   )
 }
 
-function SecondForm({ sheet }: { sheet: BathSheet }) {
+function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
   const { number, key, second } = sheet
   const units = amountUnits(sheet)
   const [form, setForm] = useState(() => emptySecond(units[0] ?? 'g'))
@@ -107,6 +110,7 @@ function SecondForm({ sheet }: { sheet: BathSheet }) {
         </div>
       ) : null}
       <p>{words.intro}</p>
+      {what}
       <WrongSummary fields={[]} general={refusal.general(['/amount', '/strengthRead', '/enclosureRead'])} />
       <TextField
         label={words.enclosure}

@@ -108,3 +108,8 @@ export function restInTheWay(sheet: BathSheet): string[] {
   const said = new Set(sheet.cautions.map(({ title, text }) => `${title}. ${text}`))
   return sheet.why.filter((why) => !said.has(why))
 }
+
+/** Whether somebody else may act on this dose at any moment: a second person who calculates, whoever stops the bath. */
+export function othersMayAct(sheet: BathSheet): boolean {
+  return sheet.state === 'running' || (sheet.state === 'due' && sheet.first !== null)
+}

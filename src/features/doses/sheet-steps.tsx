@@ -48,7 +48,7 @@ function WhereToResolve({ step, sheet, lotId }: { step: Step; sheet: BathSheet; 
     case 'water':
       return <ButtonLink to={paths.enclosure(enclosureCode)}>{words.toWater}</ButtonLink>
     case 'second-calculation':
-      return (
+      return sheet.first === null || sheet.first.mine ? null : (
         <ButtonLink to={`${paths.orderSheet(number)}?dose=${key}&part=second`}>{words.toSecond}</ButtonLink>
       )
     case 'lot':

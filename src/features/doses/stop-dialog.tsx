@@ -23,8 +23,19 @@ const wordsOf = (kind: StopKind) =>
   })[kind]
 
 /** Ends a bath. Its time is the moment of the first press; no password and no word is asked for. */
-export function StopDialog({ doseId, kind, onBack }: { doseId: string; kind: StopKind; onBack: () => void }) {
-  const when = useMoment()
+export function StopDialog({
+  doseId,
+  kind,
+  now,
+  onBack,
+}: {
+  doseId: string
+  kind: StopKind
+  /** The server's time at the press. */
+  now: string
+  onBack: () => void
+}) {
+  const when = useMoment(now)
   const stop = useStopBath()
   const refusal = useRefusal()
   const say = useToast()

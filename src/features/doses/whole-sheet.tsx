@@ -23,10 +23,15 @@ import { lotToOpen, nextAct, openRecord, openSteps, restInTheWay } from './sheet
 import type { NextAct } from './sheet-model.ts'
 import { Amounts, CautionsNow, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'
+import { serverOffsetMs } from './timer-model.ts'
 import { StopDialog } from './stop-dialog.tsx'
 import type { StopKind } from './stop-dialog.tsx'
 
-type Front = { stop: StopKind } | 'hold' | 'record' | null
+/** A dialog in front, with the server's time at which it was asked for. */
+interface Front {
+  what: StopKind | 'hold' | 'record'
+  now: string
+}
 
 /** The sheet with its amounts: conditions, calculations, giving, the running bath, what was recorded. */
 export function WholeSheet({
@@ -40,12 +45,15 @@ export function WholeSheet({
   receivedMs: number
   onLookAgain: () => void
 }) {
-  const [front, setFront] = useState<Front>(null)
+  const [front, setFront] = useState<Front | null>(null)
   const [chosenLot, setChosenLot] = useState<string | null>(null)
   const lotId = chosenLot ?? lotToOpen(sheet)
   const act = nextAct(sheet)
   const record = openRecord(sheet)
   const running = act === 'running' && record !== null
+  const ask = (what: Front['what']) =>
+    setFront({ what, now: new Date(Date.now() + serverOffsetMs(sheet.now, receivedMs)).toISOString() })
+  const isFootEmpty = (act === 'done' || act === 'closed') && !mayHold(sheet)
   const open = act === 'calculate' || act === 'wait-for-second' || act === 'resolve' || act === 'give'
   return (
     <>
@@ -65,20 +73,22 @@ export function WholeSheet({
           ) : undefined
         }
         foot={
-          <Foot
-            sheet={sheet}
-            act={act}
-            lotId={lotId}
-            doseId={record?.id ?? null}
-            onFront={setFront}
-            onLookAgain={onLookAgain}
-          />
+          isFootEmpty ? undefined : (
+            <Foot
+              sheet={sheet}
+              act={act}
+              lotId={lotId}
+              doseId={record?.id ?? null}
+              onFront={ask}
+              onLookAgain={onLookAgain}
+            />
+          )
         }
       >
         <Standing sheet={sheet} zone={zone} />
         <DosePicker sheet={sheet} zone={zone} />
         {running ? <RunningSteps sheet={sheet} record={record} zone={zone} /> : null}
-        <StopCriteria sheet={sheet} />
+        {act === 'done' ? null : <StopCriteria sheet={sheet} />}
         <WhatGoesIn sheet={sheet} zone={zone} />
         {open ? (
           <>
@@ -96,15 +106,19 @@ export function WholeSheet({
         <RecordedDoses sheet={sheet} zone={zone} />
         <div className="row row-wrap">
           {sheet.may.includes('dose.record') ? (
-            <Button onClick={() => setFront('record')}>{words.record}</Button>
+            <Button onClick={() => ask('record')}>{words.record}</Button>
           ) : null}
           <PrintLink number={sheet.number} doseKey={sheet.key} />
         </div>
       </PhoneSheet>
-      {front === 'hold' ? <HoldDialog number={sheet.number} onBack={() => setFront(null)} /> : null}
-      {front === 'record' ? <RecordDialog sheet={sheet} onBack={() => setFront(null)} /> : null}
-      {typeof front === 'object' && front !== null && record ? (
-        <StopDialog doseId={record.id} kind={front.stop} onBack={() => setFront(null)} />
+      {front?.what === 'hold' ? (
+        <HoldDialog number={sheet.number} now={front.now} onBack={() => setFront(null)} />
+      ) : null}
+      {front?.what === 'record' ? (
+        <RecordDialog sheet={sheet} now={front.now} onBack={() => setFront(null)} />
+      ) : null}
+      {front && front.what !== 'hold' && front.what !== 'record' && record ? (
+        <StopDialog doseId={record.id} kind={front.what} now={front.now} onBack={() => setFront(null)} />
       ) : null}
     </>
   )
@@ -128,6 +142,8 @@ function InTheWay({ sheet, act }: { sheet: BathSheet; act: NextAct }) {
   )
 }
 
+const mayHold = (sheet: BathSheet) => sheet.may.includes('order.hold') && sheet.standing === null
+
 /** Within reach of the thumb: the next act, holding, and, while a bath runs, stopping it. */
 function Foot({
   sheet,
@@ -141,15 +157,14 @@ function Foot({
   act: NextAct
   lotId: string
   doseId: string | null
-  onFront: (front: Front) => void
+  onFront: (what: Front['what']) => void
   onLookAgain: () => void
 }) {
   const may = (action: string) => sheet.may.includes(action)
-  const mayHold = may('order.hold') && sheet.standing === null
   const primary = (
     <Primary sheet={sheet} act={act} lotId={lotId} onFront={onFront} onLookAgain={onLookAgain} />
   )
-  const hold = mayHold ? (
+  const hold = mayHold(sheet) ? (
     <Button kind="hold" size="touch" onClick={() => onFront('hold')}>
       {words.hold}
     </Button>
@@ -170,10 +185,10 @@ function Foot({
         </div>
         {may('bath.stop') && doseId !== null ? (
           <div className="foot-duo">
-            <Button kind="stop" size="touch" onClick={() => onFront({ stop: 'stop' })}>
+            <Button kind="stop" size="touch" onClick={() => onFront('stop')}>
               {timerWords.stop}
             </Button>
-            <Button size="touch" onClick={() => onFront({ stop: 'end' })}>
+            <Button size="touch" onClick={() => onFront('end')}>
               {timerWords.end}
             </Button>
           </div>
@@ -198,14 +213,14 @@ function Primary({
   sheet: BathSheet
   act: NextAct
   lotId: string
-  onFront: (front: Front) => void
+  onFront: (what: Front['what']) => void
   onLookAgain: () => void
 }) {
   if (act === 'calculate' && sheet.may.includes('dose.give'))
     return <CalculateAct sheet={sheet} lotId={lotId} />
   if (act === 'in-the-water' && sheet.may.includes('bath.stop'))
     return (
-      <Button kind="primary" size="touch" onClick={() => onFront({ stop: 'out' })}>
+      <Button kind="primary" size="touch" onClick={() => onFront('out')}>
         {timerWords.out}
       </Button>
     )

@@ -12,6 +12,7 @@ import {
   lotToOpen,
   nextAct,
   openSteps,
+  othersMayAct,
   otherCautions,
   restInTheWay,
   secondIsShut,
@@ -131,6 +132,13 @@ describe('the next act at the tank', () => {
     const left = { contactMinutes: null, state: 'done' as const }
     expect(nextAct(sheet({ ...left, recorded: [record()] }))).toBe('in-the-water')
     expect(nextAct(sheet({ ...left, recorded: [record({ kind: 'withheld' })] }))).toBe('done')
+  })
+  it('is looked at again by itself while somebody else may act', () => {
+    const differs = { ...second, agrees: false }
+    expect(othersMayAct(sheet({ first, second: differs }))).toBe(true)
+    expect(othersMayAct(sheet({ state: 'running' }))).toBe(true)
+    expect(othersMayAct(sheet())).toBe(false)
+    expect(othersMayAct(sheet({ state: 'done', first }))).toBe(false)
   })
   it('is closed while the order is held, ended or broken', () => {
     for (const state of ['held', 'ended', 'broken'] as const) expect(nextAct(sheet({ state }))).toBe('closed')

@@ -1,0 +1,294 @@
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import {
+  aBathWater,
+  aDraft,
+  aProduct,
+  aSchool,
+  bathFields,
+  readingsNow,
+  signDraft,
+} from '../builders/an-order.ts'
+import type { BuiltEnclosure } from '../builders/a-water.ts'
+import { password } from '../support/api.ts'
+import { expectAccessible } from '../support/axe.ts'
+import { launchChromium, newSession } from '../support/chromium.ts'
+import { startServedApp } from '../support/served-app.ts'
+import type { ServedApp } from '../support/served-app.ts'
+
+let browser: Browser
+let begunMs: number
+let app: ServedApp
+let tank: BuiltEnclosure & { sumpId: string }
+let formalin: { id: string; lotId: string }
+let school: { id: string }
+
+beforeAll(async () => {
+  app = await startServedApp()
+  for (const role of ['veterinarian', 'technician', 'keeper'] as const) await app.as(role)
+  await app.person({
+    email: 'second@harrow-point.example',
+    printedName: 'Second technician',
+    roles: ['technician'],
+  })
+  tank = await aBathWater(app, 'QT-3')
+  school = await aSchool(app, tank.id, 1)
+  formalin = await aProduct(app, {
+    agent: 'formalin',
+    productName: 'Formalin 37 %',
+    form: 'liquid',
+    strength: { value: '37', unit: 'percent_w_w' },
+    density: { value: '1.08', unit: 'g/mL' },
+  })
+  // another container, at which nobody has looked today
+  const { agent } = await app.as('technician')
+  await agent
+    .post(`/api/products/${formalin.id}/lots`)
+    .send({ id: app.nextId(), lotNumber: 'FM-2202', expiresOn: '2028-03-31', receivedOn: '2026-11-10' })
+    .expect(201)
+  begunMs = app.clock.now().getTime()
+  browser = await launchChromium()
+}, 180_000)
+afterAll(async () => {
+  await browser.close()
+  await app.stop()
+})
+
+const expectedErrors = [/401 \(Unauthorized\)/, /409 \(Conflict\)/, /422 \(Unprocessable/]
+const desk = { width: 1440, height: 900, expectedErrors }
+const phone = { width: 390, height: 844, expectedErrors }
+
+/** A formalin bath of 45 min at 100 µL/L, a hazard: 2,181.4 L × 100 µL/L = 218.14 mL, worked by hand. */
+async function aSignedBath(given: object = {}): Promise<string> {
+  const draft = await aDraft(
+    app,
+    bathFields({
+      enclosureId: tank.id,
+      animalIds: [school.id],
+      productId: formalin.id,
+      lotId: formalin.lotId,
+      target: { value: '100', unit: 'uL/L' },
+      basis: 'product',
+      timing: 'timed',
+      contactMinutes: 45,
+      division: { value: '1', unit: 'mL' },
+      startsAt: '2026-12-01T18:20:00Z',
+      stopIf: 'any fish lies on its side, or gasps at the surface, or 45 minutes are over',
+      ...given,
+    }),
+  )
+  const signed = await signDraft(app, draft)
+  if (signed.status !== 201) throw new Error(JSON.stringify(signed.body))
+  return draft.number
+}
+
+const freshWater = () =>
+  readingsNow(app, tank.waterBodyId, {
+    'dissolved-oxygen': ['6.9', 'mg/L'],
+    temperature: ['20.4', 'degC'],
+    salinity: ['33.1', 'PSS-78'],
+    ph: ['8.1', 'pH'],
+    alkalinity: ['2.4', 'meq/L'],
+  })
+
+async function signedIn(email: string, size: typeof desk, at: string): Promise<Page> {
+  const { page } = await newSession(browser, size)
+  await page.goto(`${app.url}${at}`)
+  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${email}@harrow-point.example`)
+  await page.getByRole('textbox', { name: 'Password' }).fill(password)
+  await page.getByRole('button', { name: 'Sign in' }).click()
+  await page.waitForURL((url) => url.pathname === at.replace(/\?.*/, ''))
+  return page
+}
+
+const picture = async (page: Page, name: string) => {
+  const folder = process.env['PRATIQUE_PICTURES']
+  if (folder) await page.screenshot({ path: `${folder}/${name}.png`, fullPage: true })
+}
+
+/** Accessible, and nothing sticks out at the side. */
+async function expectSound(page: Page, name: string): Promise<void> {
+  await picture(page, name)
+  await expectAccessible(page, name)
+  const [width, wanted] = await page.evaluate(() => [document.documentElement.scrollWidth, window.innerWidth])
+  expect(width, `${name}: width`).toBeLessThanOrEqual(wanted ?? 0)
+}
+
+/** Everything that the server sends to a page from now on. */
+function listen(page: Page): string[] {
+  const heard: string[] = []
+  page.on('response', (response) => {
+    if (response.url().includes('/api/'))
+      void response.text().then(
+        (text) => heard.push(text),
+        () => undefined,
+      )
+  })
+  return heard
+}
+
+async function fillSecond(page: Page, amount: string) {
+  await page.getByRole('textbox', { name: /Enclosure, from its label/ }).fill('QT-3')
+  await page.getByRole('textbox', { name: /fill mark/ }).fill('0.68 m')
+  await page.getByRole('textbox', { name: /Strength, from the container/ }).fill('37')
+  await page.getByRole('textbox', { name: /Lot number/ }).fill('FM-2202')
+  await page.getByRole('textbox', { name: /Amount that you work out/ }).fill(amount)
+}
+
+/** Minutes after everything was set up. */
+const later = (minutes: number) => new Date(begunMs + minutes * 60_000)
+
+// every state is looked at by the accessibility checker, which takes its time on a small machine
+const patience = 240_000
+
+describe('a bath at the tank', { timeout: patience }, () => {
+  it('is worked out twice, given, timed by the server and stopped by a keeper, all on phones', async () => {
+    app.clock.set(later(0))
+    const number = await aSignedBath({ doses: 2, intervalHours: 48 })
+    const sheetAt = `/orders/${number}/sheet`
+    const tech = await signedIn('technician', phone, sheetAt)
+    await tech.waitForURL(/dose=1/)
+
+    // conditions are steps; what is not known leads to where it is entered
+    await tech.getByText(/Water tested: oxygen within/).waitFor()
+    const reading = tech.getByRole('link', { name: 'Enter a reading' }).first()
+    expect(await reading.getAttribute('href')).toBe('/enclosures/QT-3/measure')
+    await expectSound(tech, 'bath-conditions-390')
+    await freshWater()
+    await tech.reload()
+
+    // the first calculation, with the lot in the hand
+    await tech
+      .getByRole('combobox', { name: 'Lot in the hand' })
+      .selectOption({ label: 'FM-2202, use by 31 Mar 2028' })
+    await tech.getByRole('button', { name: 'Work it out with this lot' }).click()
+    await tech.getByText(/Test technician, .*: 218\s?mL, lot FM-2202/).waitFor()
+    await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).click()
+    await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).waitFor({ state: 'detached' })
+    await tech.getByText('A veterinarian, technician or keeper who is not you').waitFor()
+    await expectSound(tech, 'bath-first-390')
+
+    // the same person is no second person
+    await tech.goto(`${app.url}${sheetAt}?dose=1&part=second`)
+    await tech.getByText('You made the first calculation').waitFor()
+    await tech.getByText(/another person’s: any veterinarian, technician or keeper/).waitFor()
+    expect(await tech.getByRole('textbox', { name: /Amount that you work out/ }).count()).toBe(0)
+    await expectSound(tech, 'bath-same-person-390')
+    await tech.goto(`${app.url}${sheetAt}?dose=1`)
+
+    // the second person sees nothing of the first, on the page or on the wire
+    const other = await signedIn('second', phone, '/settings/own')
+    const heard = listen(other)
+    await other.goto(`${app.url}${sheetAt}?dose=1`)
+    await other.getByText('The first result is not on this screen.').waitFor()
+    const amountField = other.getByRole('textbox', { name: /Amount that you work out/ })
+    expect(await amountField.isDisabled()).toBe(true)
+    await expectSound(other, 'bath-second-390')
+    await fillSecond(other, '2180')
+    await other.getByRole('button', { name: 'Compare with the first' }).click()
+    await other.getByText('The two do not agree. Nothing is given.').waitFor()
+    await other.getByText(/The amounts differ by more than 2/).waitFor()
+    await expectSound(other, 'bath-second-differs-390')
+    expect(await amountField.inputValue()).toBe('')
+    const seen = `${heard.join(' ')} ${await other.content()}`.replaceAll('2,180', '').replaceAll('2180', '')
+    expect(heard.length).toBeGreaterThan(2)
+    expect(seen).not.toMatch(/218|PZ-0317/)
+
+    await tech.getByText('the two do not agree').waitFor()
+    await fillSecond(other, '219')
+    await other.getByRole('button', { name: 'Compare with the first' }).click()
+    await other.getByText(/Second technician, .*: 219\s?mL\. The two agree\./).waitFor()
+
+    // what is weighed is typed, and a slip of ten is refused
+    await tech.getByRole('textbox', { name: 'Weighed or measured' }).fill('2180')
+    await expectSound(tech, 'bath-give-390')
+    await tech.getByRole('button', { name: 'It is in the water: start the time' }).click()
+    await tech.getByText(/has to be 218\s?mL/).waitFor()
+    await tech.getByRole('textbox', { name: 'Weighed or measured' }).fill('218')
+    await tech.getByRole('button', { name: 'It is in the water: start the time' }).click()
+
+    // the time is the server's: it survives a reload, and a page whose own clock stands still
+    const time = tech.getByRole('timer')
+    await time.filter({ hasText: /^4[45]:\d\d$/ }).waitFor()
+    await tech.getByText('Stop the bath if').waitFor()
+    await expectSound(tech, 'bath-running-390')
+    app.clock.set(later(20))
+    await tech.reload()
+    await time.filter({ hasText: /^2[56]:\d\d$/ }).waitFor()
+
+    // a keeper sees what has to be seen, and stops without a password
+    const keeper = await signedIn('keeper', phone, `${sheetAt}?dose=1`)
+    await keeper
+      .getByRole('timer')
+      .filter({ hasText: /^2[56]:\d\d$/ })
+      .waitFor()
+    app.clock.set(later(47))
+    await keeper.reload()
+    await keeper
+      .getByRole('timer')
+      .filter({ hasText: /over by 1:|over by 2:/ })
+      .waitFor()
+    await keeper.getByText('Take the animals out, or flush the water now.').first().waitFor()
+    await expectSound(keeper, 'bath-time-up-390')
+    const stop = keeper.getByRole('button', { name: 'Stop the bath' })
+    expect(await stop.evaluate((node) => node.getBoundingClientRect().bottom <= window.innerHeight)).toBe(
+      true,
+    )
+    await stop.click()
+    const dialog = keeper.getByRole('alertdialog')
+    await dialog.getByRole('textbox', { name: 'What was seen' }).fill('two on their side')
+    await dialog.getByRole('textbox', { name: 'What was done for the animals' }).fill('flushed, air on full')
+    await expectSound(keeper, 'bath-stop-390')
+    expect(await keeper.getByLabel('Password').count()).toBe(0)
+    await dialog.getByRole('button', { name: 'Stop it now' }).click()
+    await keeper.getByText(/Stopped at 15:0\d, Test keeper/).waitFor()
+    await keeper.getByText('Seen: two on their side').waitFor()
+    await keeper.getByText('Done: flushed, air on full').waitFor()
+    await expectSound(keeper, 'bath-stopped-390')
+  })
+
+  it('is recorded afterwards with its own time, with what would have stopped it; held orders say so', async () => {
+    app.clock.set(later(60))
+    const number = await aSignedBath({ startsAt: '2026-12-01T13:00:00Z' })
+    const page = await signedIn('keeper', phone, `/orders/${number}/sheet?dose=1`)
+    await page.getByRole('button', { name: 'Record what happened' }).click()
+    const dialog = page.getByRole('dialog')
+    await dialog.getByRole('radio', { name: 'It was given' }).click()
+    await dialog.getByRole('textbox', { name: 'How much was given' }).fill('220')
+    await dialog.getByLabel('When', { exact: true }).fill('2026-12-01T09:05')
+    await dialog.getByLabel(/When the bath ended/).fill('2026-12-01T09:45')
+    await dialog.getByRole('textbox', { name: 'In words' }).fill('before the day’s rounds')
+    await expectSound(page, 'bath-record-390')
+    await dialog.getByRole('button', { name: 'Record it' }).click()
+    await page.getByText('Recorded as given').waitFor()
+    await page.getByText(/Test keeper, 09:05, entered 15:2\d/).waitFor()
+    await page.getByText('Out of the bath at 09:45, Test keeper').waitFor()
+    await page.getByText('For the veterinarian to review').waitFor()
+    await page.getByText('The order was signed after this dose').waitFor()
+    await expectSound(page, 'bath-recorded-390')
+
+    const held = await aSignedBath()
+    await page.goto(`${app.url}/orders/${held}/sheet?dose=1`)
+    await page.getByRole('button', { name: 'Hold' }).click()
+    await page.getByRole('dialog').getByRole('textbox', { name: 'What you saw' }).fill('fast breathing')
+    await page.getByRole('dialog').getByRole('button', { name: 'Hold it now' }).click()
+    await page.getByRole('heading', { name: 'Held: do not dose' }).waitFor()
+    await page.getByText('fast breathing').waitFor()
+    await page.getByText(/can still be recorded/).waitFor()
+    expect(await page.getByRole('button', { name: 'Work it out with this lot' }).count()).toBe(0)
+    await expectSound(page, 'bath-held-390')
+  })
+
+  it('reads well at a desk, and says plainly that there is no such dose', async () => {
+    app.clock.set(later(70))
+    const number = await aSignedBath({ doses: 3, intervalHours: 24, startsAt: '2026-12-01T20:00:00Z' })
+    const page = await signedIn('veterinarian', desk, `/orders/${number}/sheet?dose=1`)
+    await page.getByRole('navigation', { name: 'Doses of this order' }).waitFor()
+    await page.getByText('The volume is the one of the signature.').waitFor()
+    await expectSound(page, 'bath-1440')
+    const print = page.getByRole('link', { name: 'Bath sheet on paper' })
+    expect(await print.getAttribute('href')).toBe(`/api/orders/${number}/doses/1/print`)
+    await page.getByRole('link', { name: /^2, / }).click()
+    await page.getByText(/dose 2 of 3/).waitFor()
+  })
+})
