@@ -1,4 +1,3 @@
-export { DoseText } from './dose-text.tsx'
 export { OrdersList, ordersAsked } from './orders-list.tsx'
 export { OrderForm } from './order-form.tsx'
 export { orderTitle, SignedOrder, UnsignedOrder } from './order-view.tsx'
