@@ -10,7 +10,7 @@ import { basisNames } from '../../../shared/messages/formulary.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
 import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
-import { signatureEntry } from '../orders/index.ts'
+import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
 
 export interface BathPaper {
@@ -170,12 +170,7 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       source: content.targetText.includes('L/L') ? orderPaper.sourceMicrolitres : orderPaper.source,
       subject: { name: sheet.enclosureCode, lines: [sheet.enclosureName, ...sheet.treated.slice(0, 3)] },
     },
-    signers: [
-      orderPaper.signedBy({
-        name: block.printedName,
-        at: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
-      }),
-    ],
+    signers: [signerLine(block)],
     ...(short.ok ? { recordCheck: short.value } : {}),
     ...(notice === null ? {} : { notice }),
     printed: {

@@ -31,7 +31,7 @@ import { answerForOrderPrints } from './print-state.ts'
 
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
-export { orderNotice, signatureEntry } from './order-document.ts'
+export { orderNotice } from './order-document.ts'
 export type { SignedOrder } from './order-content.ts'
 export type { OpenOrder, OrderWork } from './order-work.ts'
 export type { EventReadRow } from './orders.reads.ts'

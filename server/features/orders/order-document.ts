@@ -1,8 +1,4 @@
-import type {
-  DocumentBlock,
-  PdfDocumentModel,
-  SignatureEntry,
-} from '../../../shared/domain/documents/pdf-document-model.ts'
+import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
@@ -13,6 +9,7 @@ import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { orderPaper, orderWords } from '../../../shared/messages/orders.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import type { SignedOrder } from './order-content.ts'
 
@@ -34,7 +31,8 @@ export function orderNotice({
   superseded,
   versionNo,
 }: Pick<OrderPaper, 'block' | 'row' | 'superseded'> & { versionNo: number }): string | null {
-  if (block.state !== 'intact') return block.state === 'broken' ? orderPaper.broken : orderPaper.unknownKey
+  if (block.state !== 'intact')
+    return block.state === 'broken' ? orderPaper.broken : documentWords.recordUnknownKey
   if (superseded) return documentWords.supersededNotice({ version: orderPaper.version({ n: versionNo + 1 }) })
   if (row.phase === 'held') return documentWords.heldNotice
   if (row.phase === 'discontinued') return orderPaper.discontinued
@@ -199,29 +197,9 @@ function givenBlock({ content, block }: OrderPaper): DocumentBlock {
   }
 }
 
-/** The signature under an order as it is printed, with the check of its text. */
-export function signatureEntry(block: SignatureBlock): SignatureEntry {
-  const words = {
-    intact: documentWords.recordIntact,
-    broken: documentWords.recordBroken,
-    'unknown-key': orderPaper.unknownKey,
-  }
-  return {
-    name: block.printedName,
-    role: orderPaper.role,
-    licence: orderPaper.licence({ number: block.licence.number, until: sayDate(block.licence.validUntil) }),
-    jurisdiction: block.licence.jurisdiction,
-    meaning: orderPaper.meaning({ meaning: block.meaning }),
-    signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
-    check: block.state === 'intact' ? 'intact' : 'broken',
-    checkWords: words[block.state],
-  }
-}
-
 /** A signed order on paper. Everything comes from the signed text, and the check of that text stands on every page. */
 export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const { content, block } = paper
-  const signedAt = sayInstantWithOffset(block.signedAt, block.zone, 'second')
   const short = formatFingerprint(block.hash)
   const notice = orderNotice({ ...paper, versionNo: content.versionNo })
   const usesMicrolitres = content.targetText.includes('L/L')
@@ -245,7 +223,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
         ],
       },
     },
-    signers: [orderPaper.signedBy({ name: block.printedName, at: signedAt })],
+    signers: [signerLine(block)],
     ...(short.ok ? { recordCheck: short.value } : {}),
     ...(notice === null ? {} : { notice }),
     printed: {
@@ -280,7 +258,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       { kind: 'heading', text: orderPaper.givenHeading },
       givenBlock(paper),
       { kind: 'signatures', entries: [signatureEntry(block)] },
-      { kind: 'fingerprint', label: orderPaper.fingerprint, fingerprint: block.hash },
+      { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
       standingCaution(),
     ],
   }

@@ -43,6 +43,18 @@ describe('what counts as an instant or a date', () => {
     for (const none of ['2026-02-29', '2026-04-31', '2026-4-1', '2026-04-01T00:00Z', 'today'])
       expect(isFacilityDate(none), none).toBe(false)
   })
+
+  it('has the days that the calendar has, leap years of a century too (against the calendar of JavaScript)', () => {
+    const two = (n: number) => String(n).padStart(2, '0')
+    for (const year of [1600, 1900, 1999, 2000, 2023, 2024, 2026, 2028, 2100, 2400])
+      for (let month = 0; month <= 13; month++)
+        for (let day = 0; day <= 32; day++) {
+          const text = `${year}-${two(month)}-${two(day)}`
+          const ms = Date.parse(`${text}T00:00:00Z`)
+          const has = Number.isFinite(ms) && new Date(ms).toISOString().startsWith(text)
+          expect(isFacilityDate(text), text).toBe(has)
+        }
+  })
   it('knows zones by name', () => {
     expect(isZone('Europe/Lisbon')).toBe(true)
     expect(isZone('Harrow/Point')).toBe(false)
