@@ -10,6 +10,7 @@ import { createDocuments } from './features/documents/index.ts'
 import { createExports } from './features/exports/index.ts'
 import { createFacility } from './features/facility/index.ts'
 import { createFormulary } from './features/formulary/index.ts'
+import { createHandover } from './features/handover/index.ts'
 import { createOrders } from './features/orders/index.ts'
 import { createPeople } from './features/people/index.ts'
 import { createPermits } from './features/permits/index.ts'
@@ -109,6 +110,7 @@ export function compose(outside: Outside) {
     orders,
     documents,
   })
+  const handover = createHandover(parts)
   const today = createToday({
     ...parts,
     facility: facility.service,
@@ -121,6 +123,7 @@ export function compose(outside: Outside) {
     acquisitions,
     orders,
     administrations,
+    handover,
   })
   return {
     parts,
@@ -140,6 +143,7 @@ export function compose(outside: Outside) {
     orders,
     administrations,
     quarantine,
+    handover,
     today,
     routes: [
       ...signInRoutes({ authenticator, lockout, people, readMe }),
@@ -159,6 +163,7 @@ export function compose(outside: Outside) {
       ...orders.routes,
       ...administrations.routes,
       ...quarantine.routes,
+      ...handover.routes,
       ...today.routes,
     ],
     /** Handlers of background work, by name. */

@@ -8,6 +8,7 @@ import { documentEntities } from './features/documents/index.ts'
 import { exportEntities } from './features/exports/index.ts'
 import { facilityEntities } from './features/facility/index.ts'
 import { formularyEntities } from './features/formulary/index.ts'
+import { handoverEntities } from './features/handover/index.ts'
 import { peopleEntities } from './features/people/index.ts'
 import { permitEntities } from './features/permits/index.ts'
 import { quarantineEntities } from './features/quarantine/index.ts'
@@ -32,4 +33,5 @@ export const entities = [
   ...acquisitionEntities,
   ...exportEntities,
   ...quarantineEntities,
+  ...handoverEntities,
 ]

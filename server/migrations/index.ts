@@ -7,6 +7,7 @@ import { Signing1764600000010 } from './0010-signing.ts'
 import { Formulary1764600000012 } from './0012-formulary.ts'
 import { Orders1764600000013 } from './0013-orders.ts'
 import { Notices1764600000014 } from './0014-notices.ts'
+import { Handover1764600000016 } from './0016-handover.ts'
 import { LotLooks1764600000019 } from './0019-lot-looks.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
@@ -21,5 +22,6 @@ export const migrations = [
   Formulary1764600000012,
   Orders1764600000013,
   Notices1764600000014,
+  Handover1764600000016,
   LotLooks1764600000019,
 ]

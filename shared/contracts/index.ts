@@ -14,6 +14,7 @@ import * as facility from './facility.contract.ts'
 import * as formulary from './formulary.contract.ts'
 import * as doses from './doses.contract.ts'
 import * as orders from './orders.contract.ts'
+import * as handover from './handover.contract.ts'
 import * as notices from './notices.contract.ts'
 import * as observations from './observations.contract.ts'
 import * as people from './people.contract.ts'
@@ -58,6 +59,7 @@ const modules = [
   clearance,
   observations,
   notices,
+  handover,
   today,
   find,
 ]

@@ -19,5 +19,17 @@ export const actAddresses = {
     path: '/orders/:number/hold-lift',
     idempotent: 'by-key',
   },
+  writeHandover: {
+    id: 'writeHandover',
+    method: 'post',
+    path: '/handover-notes',
+    idempotent: 'by-record-id',
+  },
+  noteHandoverRead: {
+    id: 'noteHandoverRead',
+    method: 'post',
+    path: '/handover-notes/:id/reads',
+    idempotent: 'by-record-id',
+  },
   stopBath: { id: 'stopBath', method: 'post', path: '/doses/:doseId/stop', idempotent: 'by-record-id' },
 } as const

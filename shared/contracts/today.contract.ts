@@ -3,6 +3,7 @@ import { todayActs } from '../domain/today/today-acts.ts'
 import { todayStates } from '../domain/today/today-item.ts'
 import { todayKindNames } from '../domain/today/today-kinds.ts'
 import { contract } from './contract.ts'
+import { HandoverNote } from './handover.contract.ts'
 import { Instant, LocalDate } from './primitives.ts'
 import { todayAddresses } from './today.addresses.ts'
 
@@ -44,6 +45,9 @@ export const getToday = contract({
       at: Instant.describe('The instant that all of this holds for'),
       on: LocalDate.describe('Its day at the facility'),
       items: z.array(TodayWork).describe('Work in the order in which it is seen to; done last'),
+      handover: z
+        .array(HandoverNote)
+        .describe('Notes of the last two days for the next watch, the newest first'),
       log: z.array(TodayLogLine).describe('What happened in the last 24 hours, the newest first'),
     }),
   },

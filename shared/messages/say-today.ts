@@ -67,7 +67,10 @@ const titles = defineMessages({
   care: (t: Told) => beside(t.text('step'), t.text('enclosure')),
   'discrepancy-registrar': (t: Told) => `Explain, ${t.text('accession')} ${t.text('animal')}`,
   'transaction-marks': (t: Told) => `${t.text('number')} goes beyond a permit`,
-  'transaction-papers': (t: Told) => `${t.text('number')} has no papers`,
+  'transaction-papers': (t: Told) =>
+    t.has('count')
+      ? `${counted(t.number('count'), 'transaction', 'transactions')} without papers`
+      : `${t.text('number')} has no papers`,
   'permit-marks': (t: Told) => `${t.text('number')} ${t.text('permit')} was overdrawn`,
   'permit-runs-out': (t: Told) =>
     `${t.text('number')} ${t.text('permit')} ends in ${counted(t.number('days'), 'day', 'days')}`,
@@ -127,7 +130,8 @@ const notes = defineMessages({
   care: sayStep,
   'discrepancy-registrar': sayDoesNotFit,
   'transaction-marks': sayTransaction,
-  'transaction-papers': sayTransaction,
+  'transaction-papers': (t: Told) =>
+    t.has('count') ? `The oldest: ${t.text('number')}, ${sayTransaction(t)}` : sayTransaction(t),
   'permit-marks': (t: Told) => t.text('authority'),
   'permit-runs-out': (t: Told) => t.text('authority'),
   'account-without-licence': () => 'Veterinarian. Cannot sign, confirm or override without one.',
@@ -196,15 +200,18 @@ const doseRecords = defineMessages({
   stopped: (t: Told) => beside(`${t.drug} bath stopped`, t.text('seen'), t.text('number')),
 })
 
+/** Each thing seen is a sentence of its own, as it was tapped. */
 const observed = defineMessages({
   seen: (t: Told) =>
-    beside(
+    [
       t.has('feeding') && feedingWords[t.text('feeding') as Feeding],
       t.has('breathing') && breathingWords[t.text('breathing') as Breathing],
       t.has('skin') && skinWords[t.text('skin') as Skin],
       t.number('dead') > 0 && `${counted(t.number('dead'), 'animal', 'animals')} found dead`,
       t.has('words') && `“${t.text('words')}”`,
-    ) || 'Looked at',
+    ]
+      .filter(Boolean)
+      .join('. ') || 'Looked at',
 })
 
 /** A line of the log in words; the place stands before it. */

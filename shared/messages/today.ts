@@ -145,6 +145,19 @@ export const agoWords = defineMessages({
   days: (p: { count: number }) => `${String(p.count)} d ago`,
 } satisfies Record<Lateness['unit'], (p: { count: number }) => string>)
 
+/** Notes from one watch to the next. */
+export const handoverWords = defineMessages({
+  title: 'Handover',
+  titleAbout: (p: { about: string }) => `Handover, ${p.about}`,
+  readBy: (p: { names: readonly string[] }) => `Read by ${p.names.join(', ')}.`,
+  readByNobody: 'Nobody has said yet that they have read it.',
+  haveRead: 'I have read it',
+  label: 'Note for the next watch',
+  about: 'What it is about',
+  leave: 'Leave the note',
+  written: 'The note stands on Today for two days',
+})
+
 export const findWords = defineMessages({
   nothing: (p: { text: string }) => `Nothing found for “${p.text}”.`,
   tryOther:

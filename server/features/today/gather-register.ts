@@ -6,6 +6,10 @@ import { onDays, waiting } from './work.ts'
 import type { Moment } from './work.ts'
 
 const mostOfAKind = 50
+const mostUnfinished = 1000
+const mostPaperless = 5
+
+type Unfinished = Awaited<ReturnType<Acquisitions['unfinished']>>[number]
 
 /** What the registrar has to see to: permits that end or were overdrawn, transactions without papers. */
 export async function gatherRegister(
@@ -16,7 +20,7 @@ export async function gatherRegister(
   const [ending, marked, unfinished] = await Promise.all([
     parts.permits.queries.permits({ ...page, state: 'runs-out', sort: 'validUntil' }),
     parts.permits.queries.permits({ ...page, open: 'yes' }),
-    parts.acquisitions.unfinished(mostOfAKind),
+    parts.acquisitions.unfinished(mostUnfinished),
   ])
   return [
     ...ending.rows.map((row) =>
@@ -38,28 +42,44 @@ export async function gatherRegister(
         params: { ...permitParams(row), marks: row.openMarks },
       }),
     ),
-    ...unfinished.flatMap((row): TodayWork[] => {
-      const params = {
-        number: row.number,
-        kind: row.kind,
-        way: row.way,
-        party: row.counterparty_name ?? '',
-        marks: row.open_marks,
-        animal: [row.accession, row.common_name].filter(Boolean).join(' '),
-        on: row.happened_on,
-      }
-      const at = row.happened_at.toISOString()
-      const items: TodayWork[] = []
-      if (row.open_marks > 0)
-        items.push(waiting({ id: `transaction-marks:${row.number}`, kind: 'transaction-marks', at, params }))
-      if (row.documents === 0 && row.counterparty_name !== null)
-        items.push(
-          waiting({ id: `transaction-papers:${row.number}`, kind: 'transaction-papers', at, params }),
-        )
-      return items
-    }),
+    ...unfinished
+      .filter((row) => row.open_marks > 0)
+      .map((row) =>
+        waiting({
+          id: `transaction-marks:${row.number}`,
+          kind: 'transaction-marks',
+          at: row.happened_at.toISOString(),
+          params: transactionParams(row),
+        }),
+      ),
+    ...paperless(unfinished.filter((row) => row.documents === 0 && row.counterparty_name !== null)),
   ]
 }
+
+/** A few transactions without papers are named; many are one piece of work, or they would hide everything else. */
+function paperless(rows: readonly Unfinished[]): TodayWork[] {
+  const [oldest] = rows
+  if (oldest === undefined) return []
+  const shown = rows.length > mostPaperless ? [oldest] : rows
+  return shown.map((row) =>
+    waiting({
+      id: `transaction-papers:${row.number}`,
+      kind: 'transaction-papers',
+      at: row.happened_at.toISOString(),
+      params: { ...transactionParams(row), ...(shown === rows ? {} : { count: rows.length }) },
+    }),
+  )
+}
+
+const transactionParams = (row: Unfinished) => ({
+  number: row.number,
+  kind: row.kind,
+  way: row.way,
+  party: row.counterparty_name ?? '',
+  marks: row.open_marks,
+  animal: [row.accession, row.common_name].filter(Boolean).join(' '),
+  on: row.happened_on,
+})
 
 const permitParams = (row: PermitRow) => ({
   number: row.number,

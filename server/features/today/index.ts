@@ -4,6 +4,7 @@ import type { Administrations } from '../administrations/index.ts'
 import type { Animals } from '../animals/index.ts'
 import type { Enclosures } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
+import type { Handover } from '../handover/index.ts'
 import type { Orders } from '../orders/index.ts'
 import type { People } from '../people/index.ts'
 import type { Permits } from '../permits/index.ts'
@@ -25,6 +26,7 @@ export interface TodayParts extends Parts {
   acquisitions: Acquisitions
   orders: Orders
   administrations: Administrations
+  handover: Handover
 }
 
 export function createToday(parts: TodayParts) {

@@ -25,6 +25,10 @@ const loggedObservations = 40
 const looksSinceDays = 60
 const msPerDay = 86_400_000
 
+/** Notes of the watches before are shown for so long. */
+const handoverHours = 48
+const handoverSince = (now: Date) => new Date(now.getTime() - handoverHours * 3_600_000)
+
 /** Asks only for what stands in some lane of the reader, everything at once. */
 export function createTodayQueries(parts: TodayParts) {
   const { clock, facility, quarantine, orders, administrations } = parts
@@ -65,7 +69,7 @@ export function createTodayQueries(parts: TodayParts) {
       const readsOrders = decide('order.read', actor.roles).allowed
       const seesTanks = seesLane('decide') || seesLane('doses') || seesLane('watch')
 
-      const [tanks, cases, notices, flagged, recent, water, register, discrepancies, people, own] =
+      const [tanks, cases, notices, flagged, recent, water, register, discrepancies, people, handover, own] =
         await Promise.all([
           readsOrders && seesTanks ? gatherTanks(moment) : { items: [], recent: [] },
           seesTanks ? gatherCases(moment) : none,
@@ -84,6 +88,7 @@ export function createTodayQueries(parts: TodayParts) {
           seesLane('people')
             ? Promise.all([parts.people.questions.accounts(now), facility.listSettings()])
             : null,
+          sees('observation') ? parts.handover.notesSince(handoverSince(now), actor.personId) : none,
           sees('own-licence') ? gatherOwnLicence(parts.people, moment) : none,
         ])
 
@@ -105,6 +110,7 @@ export function createTodayQueries(parts: TodayParts) {
           items.filter(({ kind }) => sees(kind)),
           zone,
         ),
+        handover,
         log: todayLog(recent.rows, tanks.recent, moment),
       }
     },

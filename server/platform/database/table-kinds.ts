@@ -101,4 +101,6 @@ export const tableKinds: Record<string, TableKind> = {
   notices: 'ledger',
   notice_deliveries: 'ledger',
   notice_acts: 'ledger',
+  handover_notes: 'ledger',
+  handover_reads: 'ledger',
 }

@@ -35,7 +35,8 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   care: toCase,
   'discrepancy-registrar': toAnimal,
   'transaction-marks': (told) => paths.transaction(told('number')),
-  'transaction-papers': (told) => paths.transaction(told('number')),
+  'transaction-papers': (told) =>
+    told('count') === '' ? paths.transaction(told('number')) : paths.register(),
   'permit-marks': (told) => paths.permit(told('number')),
   'permit-runs-out': (told) => paths.permit(told('number')),
   'account-without-licence': toPerson,

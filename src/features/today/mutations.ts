@@ -1,5 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import type { stopBath } from '../../../shared/contracts/doses.contract.ts'
+import type { noteHandoverRead, writeHandover } from '../../../shared/contracts/handover.contract.ts'
 import type { noteSeen } from '../../../shared/contracts/notices.contract.ts'
 import type { reviewObservation } from '../../../shared/contracts/observations.contract.ts'
 import type { liftOrderHold } from '../../../shared/contracts/orders.contract.ts'
@@ -61,6 +62,29 @@ export function useStopBath() {
           happenedAt: given.happenedAt,
           ...(given.seen === '' ? {} : { seen: given.seen }),
         },
+      }),
+    onSuccess,
+  })
+}
+
+export function useWriteHandover() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { id: string; about: string; words: string }) =>
+      api<typeof writeHandover>(actAddresses.writeHandover, {
+        body: { id: given.id, words: given.words, ...(given.about === '' ? {} : { about: given.about }) },
+      }),
+    onSuccess,
+  })
+}
+
+export function useMarkHandoverRead() {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { noteId: string; id: string }) =>
+      api<typeof noteHandoverRead>(actAddresses.noteHandoverRead, {
+        params: { id: given.noteId },
+        body: { id: given.id },
       }),
     onSuccess,
   })

@@ -1,4 +1,5 @@
 import { Link } from 'react-router-dom'
+import type { HandoverNote } from '../../../shared/contracts/handover.contract.ts'
 import type { TodayLogLine } from '../../../shared/contracts/today.contract.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { sayTime } from '../../../shared/messages/say-date.ts'
@@ -6,17 +7,35 @@ import { sayLogLine } from '../../../shared/messages/say-today.ts'
 import { todayWords } from '../../../shared/messages/today.ts'
 import { paths } from '../../lib/paths.ts'
 import { longDay } from '../../ui/day-words.ts'
+import { HandoverNotes } from './handover-notes.tsx'
+import { WriteHandover } from './write-handover.tsx'
 import { LogColumn } from '../../ui/log-column.tsx'
 import type { LogEntry } from '../../ui/log-column.tsx'
 
 /** What people at the tanks wrote in the last 24 hours, the newest first. */
-export function TodayLog({ lines, at, zone }: { lines: readonly TodayLogLine[]; at: string; zone: string }) {
+export function TodayLog({
+  lines,
+  handover,
+  at,
+  zone,
+}: {
+  lines: readonly TodayLogLine[]
+  handover: readonly HandoverNote[]
+  at: string
+  zone: string
+}) {
   return (
     <LogColumn
       title={todayWords.log}
       about={todayWords.logHours}
       entries={entriesOf(lines, at, zone)}
-      head={lines.length === 0 ? <p className="t-2 py-3">{todayWords.logEmpty}</p> : undefined}
+      head={
+        <>
+          <HandoverNotes notes={handover} at={at} zone={zone} />
+          {lines.length === 0 ? <p className="t-2 py-3">{todayWords.logEmpty}</p> : null}
+        </>
+      }
+      foot={<WriteHandover />}
     />
   )
 }

@@ -15,6 +15,8 @@ import { longDay } from '../../ui/day-words.ts'
 import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { SegmentedChoice } from '../../ui/segmented-choice.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
+import { useMedia } from '../../ui/use-media.ts'
+import { HandoverNotes } from './handover-notes.tsx'
 import { TodayBands } from './today-bands.tsx'
 import { TodayDone } from './today-done.tsx'
 import { TodayLog } from './today-log.tsx'
@@ -29,6 +31,7 @@ export function TodaySheet() {
   const preferred = usePreference('todayLane')
   const { zone } = me.facility
   const reply = query.data
+  const narrow = useMedia('(max-width: 1200px)')
   // the log is of the tanks, and for whoever works there
   const atTheTanks = lanesSeenBy(me.roles).includes('watch')
   const view = reply && viewToday(reply.items, { at: reply.at, zone, roles: me.roles, preferred })
@@ -64,6 +67,7 @@ export function TodaySheet() {
         {!reply && query.isPending ? <ListFetching what={todayWords.what} rows={6} /> : null}
         {reply && view ? (
           <>
+            {narrow ? <UnreadHandover reply={reply} zone={zone} /> : null}
             <UrgentCalls calls={view.urgent} at={reply.at} zone={zone} />
             <TodayBands view={view} at={reply.at} zone={zone} />
             <TodayDone items={view.done} at={reply.at} zone={zone} />
@@ -75,8 +79,26 @@ export function TodaySheet() {
   )
 }
 
+/** Where the log is a drawer, a note that this person has not read stands before the work. */
+function UnreadHandover({ reply, zone }: { reply: TodayReply; zone: string }) {
+  const unread = reply.handover.filter((note) => !note.mine && !note.readByMe)
+  if (unread.length === 0) return null
+  return (
+    <div className="today-handover">
+      <HandoverNotes notes={unread} at={reply.at} zone={zone} />
+    </div>
+  )
+}
+
 function ShipsLog({ reply, zone }: { reply: TodayReply | undefined; zone: string }) {
-  return <TodayLog lines={reply?.log ?? []} at={reply?.at ?? new Date().toISOString()} zone={zone} />
+  return (
+    <TodayLog
+      lines={reply?.log ?? []}
+      handover={reply?.handover ?? []}
+      at={reply?.at ?? new Date().toISOString()}
+      zone={zone}
+    />
+  )
 }
 
 /** How much waits, and the lane that comes first. */

@@ -1,6 +1,7 @@
 import { QueryClientProvider } from '@tanstack/react-query'
 import { act } from 'react'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
+import type { HandoverNote } from '../../../shared/contracts/handover.contract.ts'
 import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { TodaySheet } from '../../../src/features/today/index.ts'
@@ -24,11 +25,13 @@ const me: Me = {
 }
 
 let items: TodayWork[] = []
+let handover: HandoverNote[] = []
 let fails = false
 const sent: { call: string; body: unknown }[] = []
 
 beforeEach(() => {
   items = []
+  handover = []
   fails = false
   sent.length = 0
   vi.spyOn(globalThis, 'fetch').mockImplementation(async (address, init) => {
@@ -37,7 +40,7 @@ beforeEach(() => {
       sent.push({ call, body: JSON.parse(String(init?.body)) as unknown })
       return new Response('{}', { status: 201 })
     }
-    if (!fails) return new Response(JSON.stringify({ at, on: '2026-12-01', items, log: [] }))
+    if (!fails) return new Response(JSON.stringify({ at, on: '2026-12-01', items, handover, log: [] }))
     const problem = { type: '/problems/server-error', title: 'Something failed here', code: 'server-error' }
     return new Response(JSON.stringify({ ...problem, status: 500, request_id: 'r-7' }), { status: 500 })
   })
@@ -165,6 +168,39 @@ describe('Today', () => {
     await type(one(dialog, 'textarea'), 'oxygen is back')
     await click(named(dialog, 'Lift the hold'))
     expect(sent).toEqual([{ call: 'POST /api/orders/TO-2/hold-lift', body: { reason: 'oxygen is back' } }])
+    client.clear()
+  })
+
+  it('shows notes of the watch before with who has read them, and keeps what is typed until it went through', async () => {
+    handover = [
+      {
+        id: 'h-1',
+        about: 'Quarantine wing',
+        words: 'Two low by the pump.',
+        at: '2026-12-01T17:30:00Z',
+        by: 'L. Haas',
+        readBy: [{ by: 'S. Brandt', at: '2026-12-01T17:44:00Z' }],
+        mine: false,
+        readByMe: false,
+      },
+    ]
+    const { place, client } = await opened()
+    // on a narrow screen what nobody here has read stands before the work, and the log is a drawer
+    const note = one(place, '.handover')
+    expect(note.textContent).toContain('Handover, Quarantine wing')
+    expect(note.textContent).toContain('Read by S. Brandt 13:44.')
+    await click(named(note, 'I have read it'))
+    expect(sent[0]?.call).toBe('POST /api/handover-notes/h-1/reads')
+    await click(named(place, /Ship’s log/))
+    await click(named(place, 'Leave the note'))
+    expect(place.textContent).toContain('Fill this in.')
+    await type(one(place, '.log-foot textarea'), 'UV off before the copper.')
+    await click(named(place, 'Leave the note'))
+    expect(sent[1]).toMatchObject({
+      call: 'POST /api/handover-notes',
+      body: { words: 'UV off before the copper.' },
+    })
+    expect(one<HTMLTextAreaElement>(place, '.log-foot textarea').value).toBe('')
     client.clear()
   })
 
