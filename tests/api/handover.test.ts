@@ -52,18 +52,25 @@ describe('a handover note', () => {
     } satisfies Partial<HandoverNote>)
   })
 
-  it('is in the audit trail with its words, and each reading of it once', async () => {
+  it('is in the audit trail with its words, withheld from who may not read charts, and each reading of it once', async () => {
+    const trail = async (role: Role, action: string) => {
+      const { agent } = await api.as(role)
+      return (await agent.get(`/api/audit?q=${action}&limit=50`).expect(200)).body.rows as {
+        after: { words?: string } | null
+        withheld: boolean
+      }[]
+    }
+    const readings = (await trail('administrator', 'handover.read')).length
     const words = 'UV on QS-B must be off before the copper at 15:00.'
     const id = api.nextId()
     await post('technician', '', { id, words })
-    await post('keeper', `/${id}/reads`, { id: api.nextId() })
-    const { agent } = await api.as('administrator')
-    const actions = async (action: string) =>
-      (
-        (await agent.get(`/api/audit?q=${action}&limit=50`).expect(200)).body.rows as { subjectId: string }[]
-      ).filter(({ subjectId }) => subjectId === id)
-    expect(await actions('handover.write')).toHaveLength(1)
-    expect(await actions('handover.read')).toHaveLength(1)
+    const reading = { id: api.nextId() }
+    await post('keeper', `/${id}/reads`, reading)
+    await post('keeper', `/${id}/reads`, reading)
+    expect((await trail('veterinarian', 'handover.write'))[0]?.after).toMatchObject({ words })
+    expect((await trail('administrator', 'handover.write'))[0]).toMatchObject({ withheld: true })
+    expect(JSON.stringify(await trail('administrator', 'handover.write'))).not.toContain('copper')
+    expect(await trail('administrator', 'handover.read')).toHaveLength(readings + 1)
   })
 
   it('is for whoever records observations, and for nobody else', async () => {

@@ -27,6 +27,7 @@ export function createHandoverService({ transactions }: { transactions: Transact
             action: 'handover.write',
             subject: subject(given.id),
             after: { about: about ?? undefined, words: given.words },
+            clinical: true,
           })
       })
     },
