@@ -24,12 +24,10 @@ let app: ServedApp
 let owner: pg.Client
 const numbers = { signed: '', copper: '', draft: '', broken: '' }
 
-const hoursFromNow = (hours: number) => new Date(Date.now() + hours * 3_600_000).toISOString()
+const hoursFromNow = (hours: number) => new Date(app.clock.now().getTime() + hours * 3_600_000).toISOString()
 
 beforeAll(async () => {
   app = await startServedApp()
-  // the page says "now" by the browser's clock, so the server has to live at the same time
-  app.clock.set(new Date())
   await app.composition.formulary.service.loadDefaults()
   for (const role of ['veterinarian', 'technician', 'keeper', 'registrar'] as const) await app.as(role)
   const late = await app.person({
@@ -300,8 +298,9 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     await page.getByRole('button', { name: 'Save mine over it' }).click()
     await page.getByRole('heading', { name: /Somebody else saved this draft/ }).waitFor({ state: 'detached' })
     expect(await problem.inputValue()).toBe('Typed by the veterinarian')
-    const kept = (await technician.agent.get(`/api/orders/${numbers.draft}`).expect(200)).body
-    expect(kept.draft.problem).toBe('Typed by the veterinarian')
+    await expect
+      .poll(async () => (await technician.agent.get(`/api/orders/${numbers.draft}`)).body.draft.problem)
+      .toBe('Typed by the veterinarian')
 
     await problem.fill('Typed and not kept')
     await page.getByRole('link', { name: 'Back to the order' }).click()

@@ -34,7 +34,7 @@ afterAll(async () => {
   await app.stop()
 })
 
-const ago = (days: number) => new Date(Date.now() - days * dayMs).toISOString()
+const ago = (days: number) => new Date(app.clock.now().getTime() - days * dayMs).toISOString()
 const desk = { width: 1440, height: 900 }
 const phone = { width: 390, height: 844 }
 

@@ -25,6 +25,8 @@ export interface SessionOptions {
   width: number
   height: number
   theme?: 'light' | 'dark'
+  /** How many days after the test day the page lives; set the clock of the server to it too. */
+  daysLater?: number
   /** Console lines that this test provokes on purpose, such as the browser's own line about a 403. */
   expectedErrors?: readonly RegExp[]
 }
@@ -40,14 +42,14 @@ export interface BrowserSession {
  * address off this machine.
  */
 export async function newSession(browser: Browser, options: SessionOptions): Promise<BrowserSession> {
-  const { width, height, theme = 'light', expectedErrors = [] } = options
+  const { width, height, theme = 'light', daysLater, expectedErrors = [] } = options
   const context = await browser.newContext({
     viewport: { width, height },
     colorScheme: theme,
     hasTouch: width < 600,
     reducedMotion: 'reduce',
   })
-  await putOnTestDay(context)
+  await putOnTestDay(context, daysLater)
   const troubles = watchForTroubles(context, expectedErrors)
   onTestFinished(async () => {
     await context.close()

@@ -16,18 +16,21 @@ export function tickingClock(): ReturnType<typeof settableClock> {
   }
 }
 
-/** Puts the pages of a context on the test day: they say "now" by their own clock. Timers go on as ever. */
-export async function putOnTestDay(context: BrowserContext): Promise<void> {
-  await context.addInitScript((ahead) => {
-    const Real = Date
-    globalThis.Date = class extends Real {
-      constructor(...given: [] | ConstructorParameters<typeof Real>) {
-        if (given.length === 0) super(Real.now() + ahead)
-        else super(...given)
-      }
-      static override now(): number {
-        return Real.now() + ahead
-      }
-    } as DateConstructor
-  }, aheadMs)
+/** Puts the pages of a context on the test day, or days after it: they say "now" by their own clock. Timers go on as ever. */
+export async function putOnTestDay(context: BrowserContext, daysLater = 0): Promise<void> {
+  await context.addInitScript(
+    (ahead) => {
+      const Real = Date
+      globalThis.Date = class extends Real {
+        constructor(...given: [] | ConstructorParameters<typeof Real>) {
+          if (given.length === 0) super(Real.now() + ahead)
+          else super(...given)
+        }
+        static override now(): number {
+          return Real.now() + ahead
+        }
+      } as DateConstructor
+    },
+    aheadMs + daysLater * 86_400_000,
+  )
 }
