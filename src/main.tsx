@@ -4,9 +4,11 @@ import './app.css'
 import { StrictMode } from 'react'
 import { createRoot } from 'react-dom/client'
 import { Application } from './app/application.tsx'
+import { startMessageLocale } from './lib/message-locale.ts'
 import { startTheme } from './lib/theme.ts'
 
 startTheme()
+if (import.meta.env.DEV || import.meta.env.VITE_PARTS === '1') startMessageLocale()
 const root = document.getElementById('root')
 if (root) {
   createRoot(root).render(

@@ -1,10 +1,13 @@
 /**
  * Every address of the application with somebody who works there, for whoever has to look at all of them: the contact
- * sheet and the test of every sheet. `:code` and the like are filled with a row of `list`, the first that `where` takes.
+ * sheet and the test of every sheet. `:code` and the like are filled with a row of `list`, the first that `where` takes, or
+ * with `fill`.
  *
- * @typedef {{ name: string, as: string, address: string, list?: string, where?: (row: Record<string, unknown>) => boolean }} Sheet
- * @type {readonly Sheet[]}
+ * @typedef {{ name: string, as: string, address: string, list?: string, fill?: string, where?: (row: Record<string, unknown>) => boolean }} Sheet
  */
+const ofQuarantineTank = { list: '/api/enclosures', where: (row) => row.code === 'QT-1' }
+
+/** @type {readonly Sheet[]} */
 export const everySheet = [
   { name: 'today', as: 'vet', address: '/' },
   { name: 'today-keeper', as: 'keeper', address: '/' },
@@ -13,17 +16,17 @@ export const everySheet = [
   { name: 'water', as: 'tech', address: '/water' },
   { name: 'water-map', as: 'tech', address: '/water/map' },
   { name: 'enclosure-new', as: 'tech', address: '/water/new' },
-  { name: 'enclosure', as: 'vet', address: '/enclosures/:code', list: '/api/enclosures' },
-  { name: 'enclosure-edit', as: 'tech', address: '/enclosures/:code/edit', list: '/api/enclosures' },
-  { name: 'enclosure-measure', as: 'keeper', address: '/enclosures/:code/measure', list: '/api/enclosures' },
+  { name: 'enclosure', as: 'vet', address: '/enclosures/:code', ...ofQuarantineTank },
+  { name: 'enclosure-edit', as: 'tech', address: '/enclosures/:code/edit', ...ofQuarantineTank },
+  { name: 'enclosure-measure', as: 'keeper', address: '/enclosures/:code/measure', ...ofQuarantineTank },
   {
     name: 'enclosure-readings',
     as: 'keeper',
     address: '/enclosures/:code/readings',
-    list: '/api/enclosures',
+    ...ofQuarantineTank,
   },
-  { name: 'enclosure-volume', as: 'tech', address: '/enclosures/:code/volume', list: '/api/enclosures' },
-  { name: 'enclosure-volumes', as: 'tech', address: '/enclosures/:code/volumes', list: '/api/enclosures' },
+  { name: 'enclosure-volume', as: 'tech', address: '/enclosures/:code/volume', ...ofQuarantineTank },
+  { name: 'enclosure-volumes', as: 'tech', address: '/enclosures/:code/volumes', ...ofQuarantineTank },
   { name: 'quarantine', as: 'vet', address: '/quarantine' },
   { name: 'quarantine-table', as: 'keeper', address: '/quarantine?rows=table' },
   { name: 'case', as: 'vet', address: '/quarantine/:number', list: '/api/cases' },
@@ -58,11 +61,36 @@ export const everySheet = [
   { name: 'exports', as: 'registrar', address: '/register/exports' },
   { name: 'parties', as: 'registrar', address: '/register/parties' },
   { name: 'check', as: 'registrar', address: '/check' },
+  { name: 'check-print', as: 'vet', address: '/check/:fingerprint', fill: '0123456789ABCDEF' },
+  { name: 'orders', as: 'tech', address: '/orders' },
+  { name: 'order-new', as: 'vet', address: '/orders/new' },
   {
-    name: 'check-print',
+    name: 'order',
     as: 'vet',
-    address: '/check/:fingerprint',
-    list: '/api/register/exports',
+    address: '/orders/:number',
+    list: '/api/orders',
+    where: (row) => row.phase === 'in-progress',
+  },
+  {
+    name: 'bath-sheet',
+    as: 'tech',
+    address: '/orders/:number/sheet',
+    list: '/api/orders',
+    where: (row) => row.phase === 'in-progress',
+  },
+  {
+    name: 'order-held',
+    as: 'keeper',
+    address: '/orders/:number',
+    list: '/api/orders',
+    where: (row) => row.phase === 'held',
+  },
+  {
+    name: 'order-edit',
+    as: 'vet',
+    address: '/orders/:number/edit',
+    list: '/api/orders',
+    where: (row) => row.phase === 'draft',
   },
   { name: 'settings-own', as: 'vet', address: '/settings/own' },
   { name: 'people', as: 'admin', address: '/settings/people' },
@@ -80,9 +108,10 @@ export const everySheet = [
  * @param {(address: string) => Promise<Record<string, unknown>>} get the body of an answer, asked for as the sheet's person
  * @returns {Promise<string | null>} null when the list has no such row
  */
-export async function addressOf({ address, list, where }, get) {
+export async function addressOf({ address, list, fill, where }, get) {
   const name = /:(\w+)/.exec(address)?.[1]
-  if (name === undefined || list === undefined) return address
+  if (name === undefined) return address
+  if (list === undefined) return address.replace(`:${name}`, fill ?? '')
   const rows = Object.values(await get(list)).find(Array.isArray) ?? []
   const row = rows.find((each) => where?.(each) ?? true)
   return row ? address.replace(`:${name}`, encodeURIComponent(String(row[name]))) : null

@@ -1,12 +1,11 @@
-import { mkdtemp, readdir, readFile, rm } from 'node:fs/promises'
-import { tmpdir } from 'node:os'
+import { readdir, readFile, rm } from 'node:fs/promises'
 import path from 'node:path'
 import { gzipSync } from 'node:zlib'
 import type { Browser } from 'playwright-core'
-import { build } from 'vite'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
+import { buildWithParts } from '../support/parts-build.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -17,10 +16,7 @@ let app: ServedApp
 let folder: string
 
 beforeAll(async () => {
-  folder = await mkdtemp(path.join(tmpdir(), 'pratique-parts-'))
-  process.env.VITE_PARTS = '1'
-  await build({ root, logLevel: 'error', build: { outDir: folder, emptyOutDir: true } })
-  delete process.env.VITE_PARTS
+  folder = await buildWithParts()
   withParts = await startServedApp({ pagesFolder: folder })
   app = await startServedApp()
   browser = await launchChromium()

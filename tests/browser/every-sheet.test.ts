@@ -1,0 +1,123 @@
+import { rm } from 'node:fs/promises'
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { addressOf, everySheet } from '../../server/cli/every-sheet.mjs'
+import { findUnsafeWriting } from '../../shared/domain/quantities/find-unsafe-writing.ts'
+import type { Writing } from '../../shared/domain/quantities/find-unsafe-writing.ts'
+import { password } from '../support/api.ts'
+import { expectAccessible } from '../support/axe.ts'
+import { launchChromium, newSession } from '../support/chromium.ts'
+import { routesOfTheClient } from '../support/client-routes.ts'
+import { buildWithParts } from '../support/parts-build.ts'
+import { startServedApp } from '../support/served-app.ts'
+import type { ServedApp } from '../support/served-app.ts'
+
+let browser: Browser
+let app: ServedApp
+let pagesFolder: string
+beforeAll(async () => {
+  pagesFolder = await buildWithParts()
+  app = await startServedApp({ demo: true, pagesFolder })
+  browser = await launchChromium()
+}, 240_000)
+afterAll(async () => {
+  await browser.close()
+  await app.stop()
+  await rm(pagesFolder, { recursive: true, force: true })
+})
+
+async function signIn(page: Page, name: string): Promise<void> {
+  const email = `${name}@harrow-point.example`
+  const reply = await page.request.post(`${app.url}/api/sign-in`, { data: { email, password } })
+  expect(reply.status(), `sign-in of ${email}`).toBe(200)
+}
+
+/** Everything that a person reads on the page, each quantity as what it is marked, and the whole as prose. */
+async function unsafeWritingOn(page: Page): Promise<string[]> {
+  const read = await page.evaluate(() => ({
+    quantities: [...document.querySelectorAll<HTMLElement>('[data-quantity]')].map((each) => ({
+      kind: each.dataset['quantity'] ?? '',
+      text: each.textContent,
+    })),
+    prose: document.body.innerText,
+  }))
+  const found = (text: string, writing: Writing) =>
+    findUnsafeWriting(text, writing).map(
+      (each) =>
+        `${writing} ${each.code}: "${each.found}" in "${text.slice(Math.max(0, each.at - 40), each.at + 40)}"`,
+    )
+  return [
+    ...read.quantities.flatMap(({ kind, text }) => found(text, kind as Writing)),
+    ...found(read.prose, 'prose'),
+  ]
+}
+
+// the first question of a page is who is signed in; the page of an address that leads nowhere is one of the sheets
+const expectedErrors = [/401 \(Unauthorized\)/]
+const desk = 1440
+const phone = { width: 390, height: 844, expectedErrors }
+const sizes = [{ width: desk, height: 900, expectedErrors }, phone]
+
+describe('the list of sheets', () => {
+  it('has every address of the client', () => {
+    const listed = new Set<string>(everySheet.map((sheet) => sheet.address.replace(/\?.*/, '')))
+    const missing = routesOfTheClient().filter((route) => !listed.has(route))
+    expect(missing).toEqual([])
+  })
+})
+
+const people = [...new Set(everySheet.map((sheet) => sheet.as))]
+
+/** Opens a sheet and waits until it has come to rest; null when the practice data has nothing to show on it. */
+async function open(page: Page, sheet: (typeof everySheet)[number]): Promise<string | null> {
+  const get = async (address: string) => (await page.request.get(app.url + address)).json()
+  const address = await addressOf(sheet, get)
+  if (address === null) return null
+  await page.goto(app.url + address)
+  await page.getByRole('heading').first().waitFor()
+  await page.waitForLoadState('networkidle')
+  return address
+}
+const widthOf = (page: Page) => page.evaluate(() => document.documentElement.scrollWidth)
+
+describe.each(sizes)('every sheet with the practice data at $width px', (size) => {
+  it.each(people)(
+    'of %s has no fault, nothing unsafe to read, nothing wider than the window',
+    async (name) => {
+      const { page } = await newSession(browser, size)
+      await signIn(page, name)
+      const get = async (address: string) => (await page.request.get(app.url + address)).json()
+      for (const sheet of everySheet.filter((each) => each.as === name)) {
+        const address = await addressOf(sheet, get)
+        expect.soft(address, `${sheet.name} has something to show`).not.toBeNull()
+        if (address === null) continue
+        await page.goto(app.url + address)
+        await page.getByRole('heading').first().waitFor()
+        await page.waitForLoadState('networkidle')
+        expect.soft(await unsafeWritingOn(page), sheet.name).toEqual([])
+        const width = await page.evaluate(() => document.documentElement.scrollWidth)
+        expect.soft(width, sheet.name).toBeLessThanOrEqual(size.width)
+        // the journeys of each feature judge their sheets on the phone
+        if (size.width === desk) await expectAccessible(page, sheet.name)
+      }
+    },
+    180_000,
+  )
+})
+
+describe.each(['pseudo', 'pseudo-rtl'])('every sheet with the words of %s', (words) => {
+  it.each(people)(
+    'of %s is no wider than a phone',
+    async (name) => {
+      const { page, context } = await newSession(browser, phone)
+      await context.addInitScript((locale) => localStorage.setItem('pratique.words', locale), words)
+      await signIn(page, name)
+      for (const sheet of everySheet.filter((each) => each.as === name)) {
+        if ((await open(page, sheet)) === null) continue
+        expect.soft(await page.locator('main').innerText(), sheet.name).toMatch(/\[.*[áéíóúñç]/)
+        expect.soft(await widthOf(page), sheet.name).toBeLessThanOrEqual(390)
+      }
+    },
+    180_000,
+  )
+})
