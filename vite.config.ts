@@ -1,4 +1,6 @@
 /// <reference types="vitest/config" />
+import { createHash } from 'node:crypto'
+import { readFileSync } from 'node:fs'
 import { defineConfig } from 'vite'
 import type { Plugin } from 'vite'
 import react from '@vitejs/plugin-react'
@@ -16,8 +18,43 @@ const paintAfterTheme: Plugin = {
   },
 }
 
+/** Sheets that must open where there is no signal, with the frames around them. */
+const withoutSignal =
+  /\/src\/app\/(shell\/(frame|hand-frame)|routes\/quarantine\/(rounds|observe|urgent|unsent))\.tsx$/
+
+/** Writes the service worker with the list of files that those sheets are built of; the version is made of their names. */
+const serviceWorker: Plugin = {
+  name: 'service-worker',
+  apply: 'build',
+  generateBundle: {
+    order: 'post',
+    handler(_options, bundle) {
+      const wanted = new Set<string>()
+      const take = (fileName: string): void => {
+        const file = bundle[fileName]
+        if (wanted.has(fileName) || file?.type !== 'chunk') return
+        wanted.add(fileName)
+        for (const css of file.viteMetadata?.importedCss ?? []) wanted.add(css)
+        file.imports.forEach(take)
+      }
+      for (const file of Object.values(bundle)) {
+        if (file.type === 'asset' && /roboto-flex-latin-(wdth|400)-normal[^/]*\.woff2$/.test(file.fileName))
+          wanted.add(file.fileName)
+        if (file.type === 'chunk' && (file.isEntry || withoutSignal.test(file.facadeModuleId ?? '')))
+          take(file.fileName)
+      }
+      const files = [...wanted].sort().map((name) => `/${name}`)
+      const version = createHash('sha256').update(files.join('\n')).digest('hex').slice(0, 12)
+      const source = readFileSync(new URL('src/service-worker.js', import.meta.url), 'utf8')
+        .replace('__VERSION__', version)
+        .replace('__FILES__', JSON.stringify(files))
+      this.emitFile({ type: 'asset', fileName: 'service-worker.js', source })
+    },
+  },
+}
+
 export default defineConfig({
-  plugins: [react(), tailwindcss(), paintAfterTheme],
+  plugins: [react(), tailwindcss(), paintAfterTheme, serviceWorker],
   // Fonts stay files: the content security policy takes none from data addresses
   build: { outDir: 'dist/client', manifest: true, assetsInlineLimit: 0 },
   test: {

@@ -30,6 +30,11 @@ export const everySheet = [
   { name: 'quarantine', as: 'vet', address: '/quarantine' },
   { name: 'quarantine-table', as: 'keeper', address: '/quarantine?rows=table' },
   { name: 'case', as: 'vet', address: '/quarantine/:number', list: '/api/cases' },
+  { name: 'case-new', as: 'tech', address: '/quarantine/new' },
+  { name: 'clearance', as: 'vet', address: '/quarantine/:number/clearance', list: '/api/cases' },
+  { name: 'rounds', as: 'keeper', address: '/rounds' },
+  { name: 'observe', as: 'keeper', address: '/enclosures/:code/observe', list: '/api/enclosures' },
+  { name: 'unsent', as: 'keeper', address: '/unsent' },
   { name: 'animals', as: 'keeper', address: '/animals' },
   {
     name: 'animal',

@@ -29,6 +29,12 @@ export const frameWords = defineMessages({
   day: 'Day',
   night: 'Night watch',
   device: 'As the device',
+  unsent: (p: { count: number }) => (p.count === 1 ? '1 entry not sent' : `${p.count} entries not sent`),
+  signOutQuestion: (p: { count: number }) =>
+    p.count === 1 ? 'Sign out with 1 entry not sent?' : `Sign out with ${p.count} entries not sent?`,
+  signOutBody:
+    'They stay on this device for you alone and are sent when you sign in here again. Nobody else can see or send them.',
+  signOutStay: 'Stay signed in',
   signOut: 'Sign out',
   facilityTime: 'Facility time',
   demo: 'Practice scenario. Nothing here is a real animal or a real record.',

@@ -31,7 +31,11 @@ const sheetRoutes: RouteObject[] = [
   { path: 'enclosures/:code/volume', lazy: () => import('./routes/enclosure-volume.tsx') },
   { path: 'enclosures/:code/volumes', lazy: () => import('./routes/enclosure-volumes.tsx') },
   { path: 'quarantine', lazy: () => import('./routes/quarantine/board.tsx') },
+  { path: 'quarantine/new', lazy: () => import('./routes/quarantine/new-case.tsx') },
+  { path: 'quarantine/:number/clearance', lazy: () => import('./routes/quarantine/clearance.tsx') },
   { path: 'quarantine/:number', lazy: () => import('./routes/quarantine/case.tsx') },
+  { path: 'rounds', lazy: () => import('./routes/quarantine/rounds.tsx') },
+  { path: 'unsent', lazy: () => import('./routes/quarantine/unsent.tsx') },
   { path: 'animals', lazy: () => import('./routes/animals.tsx') },
   { path: 'animals/:accession', lazy: () => import('./routes/animal.tsx') },
   { path: 'orders', lazy: () => import('./routes/orders/orders.tsx') },
@@ -59,6 +63,12 @@ const sheetRoutes: RouteObject[] = [
   { path: 'check/:fingerprint', lazy: () => import('./routes/check.tsx') },
 ]
 
+/** Sheets for the hand: no bridge over them. */
+const handRoutes: RouteObject[] = [
+  { path: 'enclosures/:code/observe', lazy: () => import('./routes/quarantine/observe.tsx') },
+  { path: 'urgent/:id', lazy: () => import('./routes/quarantine/urgent.tsx') },
+]
+
 /** The routes of the whole client. */
 export function createRoutes(client: QueryClient): RouteObject[] {
   return [
@@ -73,6 +83,11 @@ export function createRoutes(client: QueryClient): RouteObject[] {
           lazy: () => import('./routes/new-password.tsx'),
         },
         ...partsRoutes,
+        {
+          lazy: () => import('./shell/hand-frame.tsx'),
+          loader: requireSignIn(client),
+          children: [{ ErrorBoundary: RouteError, children: handRoutes }],
+        },
         {
           lazy: () => import('./shell/frame.tsx'),
           loader: requireSignIn(client),

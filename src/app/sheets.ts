@@ -16,7 +16,7 @@ export interface Sheet {
 
 const own: Record<SheetName, { to: string; under: readonly string[] }> = {
   today: { to: paths.today(), under: [] },
-  quarantine: { to: paths.quarantine(), under: ['/rounds', '/urgent', '/unsent'] },
+  quarantine: { to: paths.quarantine(), under: ['/rounds', '/unsent'] },
   animals: { to: paths.animals(), under: ['/samples'] },
   water: { to: paths.water(), under: ['/enclosures', '/systems', '/e'] },
   orders: { to: paths.orders(), under: ['/check'] },

@@ -7,18 +7,48 @@ import { api } from './api-client.ts'
 import { isProblem } from './problem-error.ts'
 import { meKey } from './query-client.ts'
 
+const personKey = 'pratique.person'
+
+/** The person who was signed in when the server last answered; storage can be refused, then nobody is known without it. */
+function keptPerson(): Me | null {
+  try {
+    const text = localStorage.getItem(personKey)
+    return text === null ? null : (JSON.parse(text) as Me)
+  } catch {
+    return null
+  }
+}
+
+function keepPerson(me: Me | null): void {
+  try {
+    if (me) localStorage.setItem(personKey, JSON.stringify(me))
+    else localStorage.removeItem(personKey)
+  } catch {
+    // not kept, see above
+  }
+}
+
 /** Who is signed in; `null` for nobody. */
 export const meQuery = queryOptions({
   queryKey: meKey,
   queryFn: async ({ signal }): Promise<Me | null> => {
     try {
-      return await api<typeof getMe>(signInAddresses.getMe, { signal })
+      const me = await api<typeof getMe>(signInAddresses.getMe, { signal })
+      keepPerson(me)
+      return me
     } catch (error) {
-      if (isProblem(error, 'not-signed-in')) return null
+      if (isProblem(error, 'not-signed-in')) {
+        keepPerson(null)
+        return null
+      }
+      // no signal: whoever was signed in still is, for what is kept on this device; the server decides when it answers
+      const last = isProblem(error) && error.noAnswer ? keptPerson() : null
+      if (last) return last
       throw error
     }
   },
   staleTime: 60_000,
+  networkMode: 'always',
 })
 
 /** Set by the application around every screen that needs somebody to be signed in. */
@@ -37,6 +67,7 @@ export function useMe(): Me {
 /** Somebody else is there now, or nobody: who that is, and nothing that was read under the one before. */
 export function changePerson(client: QueryClient, me: Me | null): void {
   client.setQueryData(meKey, me)
+  keepPerson(me)
   client.removeQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
   client.getMutationCache().clear()
 }

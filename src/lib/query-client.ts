@@ -10,13 +10,15 @@ export function createQueryClient(): QueryClient {
     queryCache: new QueryCache({ onError: noticeSession }),
     mutationCache: new MutationCache({ onError: noticeSession }),
     defaultOptions: {
+      // asked even when the browser thinks there is no network: an answer or a plain failure, never a silent wait
       queries: {
+        networkMode: 'always',
         staleTime: 15_000,
         retry: (failures, error) => failures < 2 && mayHeal(error),
         retryDelay: (attempt) => Math.min(4000, 500 * 2 ** attempt),
         throwOnError: false,
       },
-      mutations: { retry: false },
+      mutations: { networkMode: 'always', retry: false },
     },
   })
   function noticeSession(error: unknown): void {

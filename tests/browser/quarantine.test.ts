@@ -1,8 +1,11 @@
+import { stat } from 'node:fs/promises'
 import path from 'node:path'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { aCase } from '../builders/a-case.ts'
+import { aCase, aFish } from '../builders/a-case.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
+import { aGroup } from '../builders/a-collection.ts'
+import { anEnclosure } from '../builders/a-water.ts'
 import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
@@ -27,6 +30,12 @@ beforeAll(async () => {
     .post(`${held.url}/holds`)
     .send({ id: app.nextId(), happenedAt: ago(1), origin: 'online', device: 'test' })
     .expect(201)
+  await app.person({
+    email: 'unlicensed@harrow-point.example',
+    printedName: 'Dr Without',
+    roles: ['veterinarian'],
+  })
+  await app.setSetting('notices.on-call', 'Dr Ines Marlow | 555 0141, Duty desk | ext. 41')
   browser = await launchChromium()
 }, 180_000)
 afterAll(async () => {
@@ -47,7 +56,13 @@ const picture = async (page: Page, name: string) => {
 async function signedIn(role: string, size: typeof desk, to: string): Promise<Page> {
   const { page } = await newSession(browser, {
     ...size,
-    expectedErrors: [/401 \(Unauthorized\)/, /403 \(Forbidden\)/, /409 \(Conflict\)/, /422 \(Unprocessable/],
+    expectedErrors: [
+      /ERR_INTERNET_DISCONNECTED/,
+      /401 \(Unauthorized\)/,
+      /403 \(Forbidden\)/,
+      /409 \(Conflict\)/,
+      /422 \(Unprocessable/,
+    ],
   })
   await page.goto(`${app.url}${to}`)
   await page.getByRole('textbox', { name: 'E-mail' }).fill(`${role}@harrow-point.example`)
@@ -106,5 +121,188 @@ describe.each([
       legs: [{ endReason: { code: 'restarted-wet-material' } }, {}],
     })
     await picture(page, `case-restarted-${String(size.width)}`)
+  })
+})
+
+describe('a keeper with wet hands, at 390 px', () => {
+  it('observes in three touches; without a signal the entry is kept, survives a reload and arrives once with its own time', async () => {
+    const tank = await aCase(app, { at: ago(6), count: 12 })
+    const { code } = tank.enclosure
+    const vet = (await app.as('veterinarian')).agent
+    const seen = async () => (await vet.get(`/api/observations?case=${tank.number}`).expect(200)).body
+    const page = await signedIn('keeper', phone, '/rounds')
+    await page.getByRole('heading', { name: 'Quarantine: Wing' }).waitFor()
+    await expectSound(page, 'rounds')
+    await picture(page, 'rounds-390')
+
+    await page.getByRole('link', { name: `Observe ${code}`, exact: true }).click()
+    await page.getByText('Say one thing, then save.').waitFor()
+    expect(await page.getByRole('radio', { checked: true }).count(), 'said beforehand').toBe(0)
+    await expectSound(page, 'observation')
+    await picture(page, 'observe-390')
+    await page.getByRole('button', { name: /^All well/ }).click()
+    await page.getByRole('button', { name: /^Save at/ }).click()
+    await page.waitForURL(/\/rounds$/)
+    await page.getByText(new RegExp(`${code}: recorded at`)).waitFor()
+    expect(await seen()).toMatchObject({
+      total: 1,
+      rows: [{ feeding: 'all', breathing: 'normal', foundDead: 0, count: null, origin: 'online' }],
+    })
+
+    // the worker that opens the application without a signal has to be there before the signal goes
+    await page.goto(`${app.url}/enclosures/${code}/observe`)
+    await page.evaluate(async () => {
+      await navigator.serviceWorker.ready
+    })
+    await page.reload()
+    await page.getByText('Say one thing, then save.').waitFor()
+    await page.context().setOffline(true)
+    await page.getByText(/^No signal since/).waitFor()
+    await page.getByRole('radio', { name: 'Some', exact: true }).click()
+    await page.getByRole('radio', { name: 'Fast', exact: true }).click()
+    await page.getByRole('checkbox', { name: /^For the veterinarian/ }).check()
+    await picture(page, 'observe-offline-390')
+    const savedAt = await page.evaluate(() => Date.now())
+    await page.getByRole('button', { name: /^Save at/ }).click()
+    await page.waitForURL(/\/rounds$/)
+    await page.getByText(/1.entry kept on this device, not yet sent/).waitFor()
+    await page.getByRole('link', { name: '1 entry not sent' }).waitFor()
+    await page.reload()
+    await page.getByText(/1.entry kept on this device, not yet sent/).waitFor()
+    await page.getByText(/This list is from/).waitFor()
+    await expectSound(page, 'rounds without a signal')
+    await picture(page, 'rounds-offline-390')
+    await page.goto(`${app.url}/enclosures/${code}/observe`)
+    await page.getByRole('button', { name: /^All well/ }).waitFor()
+    await page.goto(`${app.url}/unsent`)
+    await page.getByText(/Some ate\. Breathing fast/).waitFor()
+    await expectSound(page, 'entries on this device')
+    await picture(page, 'unsent-390')
+    expect((await seen()).total).toBe(1)
+
+    await page.getByRole('button', { name: /^Test keeper/ }).click()
+    await page.getByRole('menuitem', { name: 'Sign out' }).click()
+    await page.getByRole('heading', { name: 'Sign out with 1 entry not sent?' }).waitFor()
+    await page.getByRole('button', { name: 'Stay signed in' }).click()
+
+    await page.waitForTimeout(1500)
+    await page.context().setOffline(false)
+    await page.getByRole('heading', { name: 'Everything is sent' }).waitFor()
+    const { total, rows } = await seen()
+    expect(total).toBe(2)
+    expect(rows[0]).toMatchObject({
+      feeding: 'some',
+      breathing: 'fast',
+      origin: 'outbox',
+      forVeterinarian: true,
+    })
+    expect(Math.abs(new Date(rows[0].happenedAt).getTime() - savedAt)).toBeLessThan(2000)
+    expect(new Date(rows[0].recordedAt).getTime()).toBeGreaterThan(savedAt + 1400)
+
+    const desktop = await signedIn('veterinarian', desk, `/quarantine/${tank.number}`)
+    await desktop.getByText('for the veterinarian').waitFor()
+    await desktop.getByRole('button', { name: 'I have read it' }).click()
+    await desktop.getByText(/^Read by Test veterinarian/).waitFor()
+    expect((await seen()).rows[0].reviewed).toMatchObject({ by: 'Test veterinarian' })
+  })
+
+  it('is told that an urgent call was not sent, whom to telephone, and later who has seen it', async () => {
+    const tank = await aCase(app, { at: ago(5), count: 4 })
+    const { code } = tank.enclosure
+    const page = await signedIn('keeper', phone, '/rounds')
+    await page.getByRole('link', { name: `Observe ${code}`, exact: true }).click()
+    await page.getByRole('button', { name: 'Hold' }).waitFor()
+    await page.waitForLoadState('networkidle')
+    await page.context().setOffline(true)
+    await page.getByRole('button', { name: 'Urgent' }).click()
+    const dialog = page.getByRole('dialog')
+    await dialog
+      .getByRole('textbox', { name: 'What did you see?' })
+      .fill('Two lie on the floor, one tail slack')
+    await dialog.getByRole('button', { name: 'Call for help' }).click()
+    await page.getByRole('heading', { name: 'NOT SENT' }).waitFor()
+    await page.getByText('This rings nobody. Telephone now:').waitFor()
+    expect(await page.getByRole('link', { name: /Dr Ines Marlow/ }).getAttribute('href')).toBe('tel:5550141')
+    await expectSound(page, 'urgent call that was not sent')
+    await picture(page, 'urgent-390')
+    await page.getByRole('button', { name: 'I have telephoned' }).click()
+    await page.getByRole('dialog').getByRole('combobox', { name: 'Whom' }).selectOption('Duty desk')
+    await page.getByRole('dialog').getByRole('button', { name: 'Record it' }).click()
+    await page.getByText(/^you telephoned Duty desk at/).waitFor()
+    await page.getByRole('button', { name: 'Hold the case' }).click()
+    await page.getByText(`${tank.number}: the hold is kept on this device, not yet sent`).waitFor()
+
+    await page.context().setOffline(false)
+    await page.getByText(/^Test keeper telephoned Duty desk at/).waitFor({ timeout: 20_000 })
+    // nobody on the list has an e-mail address: with the server is not the same as sent
+    await page.getByRole('heading', { name: 'NOT SENT' }).waitFor()
+    const { body } = await (await app.as('veterinarian')).agent.get(tank.url).expect(200)
+    expect(body).toMatchObject({ held: true })
+
+    const desktop = await signedIn('veterinarian', desk, `/quarantine/${tank.number}`)
+    await desktop.getByRole('link', { name: 'Open the call' }).click()
+    await desktop.getByRole('button', { name: 'I have seen it and see to it' }).click()
+    await desktop.getByText(/^Seen by Test veterinarian at/).waitFor()
+    await page.getByRole('heading', { name: 'Seen', exact: true }).waitFor()
+    await page.getByText(/^Seen by Test veterinarian at/).waitFor()
+    await picture(page, 'urgent-seen-390')
+    expect(
+      (await (await app.as('keeper')).agent.get('/api/notices?state=all').expect(200)).body.rows,
+    ).toHaveLength(1)
+  })
+})
+
+describe.each([desk, phone])('the beginning and the end of a case at $width px', (size) => {
+  it('a technician opens it for everybody in a tank, and a veterinarian clears it against what is unmet', async () => {
+    const code = `N-${String(size.width)}`
+    const tank = await anEnclosure(app, code, { boundary: 'Wing' })
+    const taxonId = await aFish(app)
+    const school = await aGroup(app, { taxonId, enclosureId: tank.id, count: 6, happenedAt: ago(3) })
+    const page = await signedIn('technician', size, '/quarantine/new')
+    await page.getByRole('combobox', { name: 'Protocol' }).selectOption({ index: 1 })
+    await page.getByRole('combobox', { name: 'Or add everybody in an enclosure' }).fill(code)
+    await page.getByRole('option', { name: new RegExp(code) }).click()
+    await page.getByRole('button', { name: 'Add everybody there' }).click()
+    await page.getByRole('button', { name: `Take ${school.accession} out of the batch` }).waitFor()
+    await page.getByRole('radio', { name: 'Yes, the batch is complete' }).click()
+    await expectSound(page, 'opening a case')
+    await picture(page, `open-case-${String(size.width)}`)
+    await page.getByRole('button', { name: 'Open the case' }).click()
+    await page.waitForURL(/\/quarantine\/Q-\d+$/)
+    await page.getByText(/^Day 0 of \d+$/).waitFor()
+    const number = new URL(page.url()).pathname.split('/').at(-1) ?? ''
+
+    const other = await signedIn('unlicensed', size, `/quarantine/${number}/clearance`)
+    await other.getByText('This case can’t be cleared yet').waitFor()
+    await other
+      .getByText(/licence/i)
+      .first()
+      .waitFor()
+
+    const vet = await signedIn('veterinarian', size, `/quarantine/${number}`)
+    await vet.getByRole('link', { name: /^Clear against \d+.unmet condition/ }).click()
+    await vet
+      .getByRole('textbox', { name: 'Why it is cleared all the same' })
+      .fill('kept apart for a year before')
+    await vet.getByRole('textbox', { name: 'Your password' }).fill('not the password')
+    await vet.getByRole('button', { name: /^Clear against/ }).click()
+    await vet.getByRole('alert').waitFor()
+    await vet.getByRole('textbox', { name: 'Your password' }).fill(password)
+    await expectSound(vet, 'clearance form')
+    await picture(vet, `clearance-${String(size.width)}`)
+    await vet.getByRole('button', { name: /^Clear against/ }).click()
+    await vet.waitForURL(/\/quarantine\/Q-\d+$/)
+    await vet.getByRole('heading', { name: 'Clearance', exact: true }).waitFor()
+    await vet.getByText(/because: kept apart for a year before/).waitFor()
+    await expectSound(vet, 'cleared case')
+    await picture(vet, `cleared-${String(size.width)}`)
+    const [download] = await Promise.all([
+      vet.waitForEvent('download'),
+      vet.getByRole('link', { name: 'Clearance certificate (PDF)' }).click(),
+    ])
+    const { size: bytes } = await stat(await download.path())
+    expect(bytes).toBeGreaterThan(2000)
+    const { body } = await (await app.as('veterinarian')).agent.get(`/api/cases/${number}`).expect(200)
+    expect(body).toMatchObject({ status: 'cleared', clearance: { reason: 'kept apart for a year before' } })
   })
 })

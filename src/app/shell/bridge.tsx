@@ -10,6 +10,7 @@ import { useMedia } from '../../ui/use-media.ts'
 import { FacilityClock } from './facility-clock.tsx'
 import { PersonMenu } from './person-menu.tsx'
 import { SheetLinks, SheetMenu } from './sheet-links.tsx'
+import { UnsentMark } from './unsent-mark.tsx'
 
 /** The bar over every sheet: mark, the eight sheets, find, facility time, the person. */
 export function Bridge({
@@ -49,6 +50,7 @@ export function Bridge({
             </>
           )}
         </button>
+        <UnsentMark short={tablet} />
         <FacilityClock now={now} />
         <PersonMenu onKeyList={onKeyList} short={tablet} />
       </div>

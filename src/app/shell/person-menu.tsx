@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import { ChevronDown, User } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { frameRoleNames, frameWords } from '../../../shared/messages/frame.ts'
@@ -6,6 +7,9 @@ import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
 import { useSetPreference } from '../../lib/preferences.ts'
 import { chooseTheme, themeChoices, useThemeChoice } from '../../lib/theme.ts'
+import { useOutbox } from '../../lib/use-outbox.ts'
+import { Button } from '../../ui/button.tsx'
+import { Dialog } from '../../ui/dialog.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { Menu } from '../../ui/menu.tsx'
 import { landedPages } from '../landed-pages.ts'
@@ -17,6 +21,9 @@ export function PersonMenu({ onKeyList, short }: { onKeyList: () => void; short:
   const mayPeople = useMay('people.manage')
   const mayFacility = useMay('facility.manage')
   const signOut = useSignOut()
+  const { waiting, refused } = useOutbox()
+  const unsent = waiting.length + refused.length
+  const [asking, setAsking] = useState(false)
   const keep = useSetPreference()
   const theme = useThemeChoice()
   const pages = [
@@ -28,83 +35,105 @@ export function PersonMenu({ onKeyList, short }: { onKeyList: () => void; short:
   ].filter((page) => page.shown && landedPages.has(page.to))
 
   return (
-    <Menu
-      label={frameWords.person({ name: me.printedName })}
-      face={
-        short ? (
-          <Icon of={User} size={20} />
-        ) : (
+    <>
+      <Menu
+        label={frameWords.person({ name: me.printedName })}
+        face={
+          short ? (
+            <Icon of={User} size={20} />
+          ) : (
+            <>
+              <Icon of={User} />
+              {me.printedName}
+              <Icon of={ChevronDown} />
+            </>
+          )
+        }
+      >
+        {(close) => (
           <>
-            <Icon of={User} />
-            {me.printedName}
-            <Icon of={ChevronDown} />
-          </>
-        )
-      }
-    >
-      {(close) => (
-        <>
-          <div className="menu-group" role="presentation">
-            <p className="menu-label t-note">
-              <b className="block text-ink text-[14px]">{me.printedName}</b>
-              {me.roles.map((role) => frameRoleNames[role]).join(', ')}
-            </p>
-            {pages.map((page) => (
-              <Link
-                key={page.to}
+            <div className="menu-group" role="presentation">
+              <p className="menu-label t-note">
+                <b className="block text-ink text-[14px]">{me.printedName}</b>
+                {me.roles.map((role) => frameRoleNames[role]).join(', ')}
+              </p>
+              {pages.map((page) => (
+                <Link
+                  key={page.to}
+                  role="menuitem"
+                  tabIndex={-1}
+                  className="menu-item"
+                  to={page.to}
+                  onClick={close}
+                >
+                  {page.words}
+                </Link>
+              ))}
+              <button
+                type="button"
                 role="menuitem"
                 tabIndex={-1}
                 className="menu-item"
-                to={page.to}
-                onClick={close}
-              >
-                {page.words}
-              </Link>
-            ))}
-            <button
-              type="button"
-              role="menuitem"
-              tabIndex={-1}
-              className="menu-item"
-              onClick={() => {
-                close()
-                onKeyList()
-              }}
-            >
-              {frameWords.help}
-            </button>
-          </div>
-          <div className="menu-group" role="group" aria-label={frameWords.watch}>
-            {themeChoices.map((choice) => (
-              <button
-                key={choice}
-                type="button"
-                role="menuitemradio"
-                tabIndex={-1}
-                aria-checked={choice === theme}
-                className="menu-item"
                 onClick={() => {
-                  chooseTheme(choice, me.id)
-                  keep.mutate({ name: 'theme', value: choice })
+                  close()
+                  onKeyList()
                 }}
               >
-                {frameWords[choice]}
+                {frameWords.help}
               </button>
-            ))}
-          </div>
-          <div className="menu-group" role="presentation">
-            <button
-              type="button"
-              role="menuitem"
-              tabIndex={-1}
-              className="menu-item"
-              onClick={() => signOut.mutate()}
-            >
-              {frameWords.signOut}
-            </button>
-          </div>
-        </>
-      )}
-    </Menu>
+            </div>
+            <div className="menu-group" role="group" aria-label={frameWords.watch}>
+              {themeChoices.map((choice) => (
+                <button
+                  key={choice}
+                  type="button"
+                  role="menuitemradio"
+                  tabIndex={-1}
+                  aria-checked={choice === theme}
+                  className="menu-item"
+                  onClick={() => {
+                    chooseTheme(choice, me.id)
+                    keep.mutate({ name: 'theme', value: choice })
+                  }}
+                >
+                  {frameWords[choice]}
+                </button>
+              ))}
+            </div>
+            <div className="menu-group" role="presentation">
+              <button
+                type="button"
+                role="menuitem"
+                tabIndex={-1}
+                className="menu-item"
+                onClick={() => {
+                  if (unsent === 0) return signOut.mutate()
+                  close()
+                  setAsking(true)
+                }}
+              >
+                {frameWords.signOut}
+              </button>
+            </div>
+          </>
+        )}
+      </Menu>
+      {asking ? (
+        <Dialog
+          question={frameWords.signOutQuestion({ count: unsent })}
+          onBack={() => setAsking(false)}
+          acts={
+            <>
+              <Button kind="primary" disabled={signOut.isPending} onClick={() => signOut.mutate()}>
+                {frameWords.signOut}
+              </Button>
+              <Button onClick={() => setAsking(false)}>{frameWords.signOutStay}</Button>
+            </>
+          }
+        >
+          <p>{frameWords.signOutBody}</p>
+        </Dialog>
+      ) : null}
+    </>
   )
 }

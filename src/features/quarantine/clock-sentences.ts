@@ -1,10 +1,11 @@
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
 import type { ClockReasonView } from '../../../shared/contracts/quarantine-primitives.ts'
+import type { UnmetCriterion } from '../../../shared/domain/quarantine/case-clock.ts'
 import type { ClockReason } from '../../../shared/domain/quarantine/clock-reason.ts'
-import { extensionKindWords, unmetWords } from '../../../shared/messages/quarantine.ts'
 import { sayClockReason } from '../../../shared/messages/say-clock-reason.ts'
 import type { ClockWords } from '../../../shared/messages/say-clock-reason.ts'
 import { sayDate, sayInstant } from '../../../shared/messages/say-date.ts'
+import { sayUnmet as sayUnmetOf } from '../../../shared/messages/say-unmet.ts'
 
 type Names = CaseDetail['names']
 
@@ -27,20 +28,7 @@ type Unmet = CaseDetail['unmet'][number]
 
 /** The sentence for one thing that stands between a case and clearance. */
 export function sayUnmet(unmet: Unmet, names: Names): string {
-  const said: Record<string, string | number> = {}
-  for (const [name, value] of Object.entries(unmet.params)) {
-    if (typeof value === 'number') said[name] = value
-    else if (value === '') said[name] = value
-    else if (name.endsWith('On')) said[name] = sayDate(value)
-    else if (name === 'otherCaseId') said[name] = names.cases[value] ?? value
-    else if (name === 'criterionId') said[name] = names.criteria[value] ?? value
-    else if (name === 'kind') said[name] = extensionKindWords[value as keyof typeof extensionKindWords]
-    else said[name] = value
-  }
-  const sentence = unmetWords[unmet.code as keyof typeof unmetWords] as (
-    params: Record<string, string | number>,
-  ) => string
-  return sentence(said)
+  return sayUnmetOf(unmet as Pick<UnmetCriterion, 'params'> & Unmet, wordsOf(names, ''))
 }
 
 /** The change that explains the clock best: the last that moved day 0 and stands, else the last that stands. */

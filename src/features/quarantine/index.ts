@@ -1,3 +1,5 @@
 export { QuarantineBoard } from './board.tsx'
 export { CaseSheet } from './case-sheet.tsx'
+export { ClearanceForm } from './clearance-form.tsx'
+export { OpenCaseForm } from './open-case-form.tsx'
 export { caseQuery, quarantineKey } from './queries.ts'
