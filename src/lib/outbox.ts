@@ -159,7 +159,9 @@ export const outbox = createOutbox({
   send: ({ address, params, body }) =>
     api<Contract>(address, { params, body, patienceMs: 8_000 } as unknown as CallOptions<Contract>),
   alone: async (work) => {
-    if ('locks' in navigator) await navigator.locks.request('pratique-outbox', work)
+    // absent on addresses without TLS; what is sent twice is kept once all the same
+    const locks = navigator.locks as LockManager | null | undefined
+    if (locks) await locks.request('pratique-outbox', work)
     else await work()
   },
 })
