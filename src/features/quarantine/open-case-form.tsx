@@ -1,5 +1,5 @@
 import { useState } from 'react'
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { Link, useNavigate } from 'react-router-dom'
 import type { AnimalRow } from '../../../shared/contracts/animals.contract.ts'
 import type { ProtocolVersion } from '../../../shared/contracts/protocols.contract.ts'
@@ -28,7 +28,7 @@ import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { BatchAnimalChooser } from './batch-animal-chooser.tsx'
 import { EnclosureBatch } from './enclosure-batch.tsx'
 import { useOpenCase } from './mutations.ts'
-import { protocolsQuery } from './queries.ts'
+import { protocolsQuery, quarantineKey } from './queries.ts'
 
 /** One animal or group of the batch, with when it came in; empty is the beginning of its stay. */
 export interface BatchLine {
@@ -61,6 +61,7 @@ export function OpenCaseForm() {
   const refusal = useRefusal()
   const navigate = useNavigate()
   const toast = useToast()
+  const client = useQueryClient()
   const { data: protocols = [] } = useQuery(protocolsQuery)
   const [ids] = useState(() => ({ id: newId(), closing: newId() }))
   const [name, setName] = useState('')
@@ -107,6 +108,7 @@ export function OpenCaseForm() {
         if (!isProblem(error)) throw error
         return setHalfDone({ number, says: error.says })
       }
+      await client.invalidateQueries({ queryKey: quarantineKey })
     }
     toast({ words: words.opened({ number }) })
     await navigate(paths.quarantineCase(number))
