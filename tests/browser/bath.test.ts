@@ -279,7 +279,42 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await expectSound(page, 'bath-held-390')
   })
 
-  it('reads well at a desk, and says plainly that there is no such dose', async () => {
+  it('of an agent left in the water asks when it is out, from which quarantine counts', async () => {
+    app.clock.set(later(65))
+    const praziquantel = await aProduct(app, {})
+    const number = await aSignedBath({
+      productId: praziquantel.id,
+      lotId: praziquantel.lotId,
+      target: { value: '2', unit: 'mg/L' },
+      basis: 'active',
+      timing: 'indefinite',
+      contactMinutes: null,
+      division: { value: '0.01', unit: 'g' },
+    })
+    const { agent } = await app.as('technician')
+    await agent
+      .post(`/api/orders/${number}/doses/1/record`)
+      .send({
+        id: app.nextId(),
+        kind: 'recorded',
+        happenedAt: '2026-12-01T18:00:00Z',
+        amount: { value: '4.36', unit: 'g' },
+        lotId: praziquantel.lotId,
+      })
+      .expect(201)
+    const page = await signedIn('keeper', phone, `/orders/${number}/sheet?dose=1`)
+    await page.getByRole('heading', { name: 'The drug is in the water' }).waitFor()
+    await expectSound(page, 'bath-in-the-water-390')
+    await page.getByRole('button', { name: 'The drug is out of the water' }).click()
+    const dialog = page.getByRole('dialog')
+    await dialog.getByRole('textbox', { name: 'How it was taken out' }).fill('carbon on, half changed')
+    await dialog.getByRole('button', { name: 'Record it' }).click()
+    await page.getByText(/Drug out of the water at 15:2\d, Test keeper/).waitFor()
+    await page.getByText('Done: carbon on, half changed').waitFor()
+    expect(await page.getByRole('heading', { name: 'The drug is in the water' }).count()).toBe(0)
+  })
+
+  it('reads well at a desk, every dose at hand', async () => {
     app.clock.set(later(70))
     const number = await aSignedBath({ doses: 3, intervalHours: 24, startsAt: '2026-12-01T20:00:00Z' })
     const page = await signedIn('veterinarian', desk, `/orders/${number}/sheet?dose=1`)

@@ -22,30 +22,44 @@ const marks: Record<Dose['state'], StepState> = {
 const stateWords = (state: Dose['state']) =>
   state === 'due' ? words.dueState : state === 'given' ? words.givenState : words[state]
 
+/** A longer course is folded away: the sheet at the tank is about one dose. */
+const mostShown = 6
+
 /** Every planned dose of the order with its state; each leads to its sheet. */
 export function DosePicker({ sheet, zone }: { sheet: BathSheet; zone: string }) {
-  if (sheet.calendar.length < 2) return null
+  const { calendar } = sheet
+  if (calendar.length < 2) return null
+  const list = (
+    <ol>
+      {calendar.map((dose) => (
+        <li key={dose.key}>
+          <Link
+            to={`${paths.orderSheet(sheet.number)}?dose=${dose.key}`}
+            aria-current={dose.key === sheet.key ? 'true' : undefined}
+          >
+            <StepPicture state={marks[dose.state]} />
+            <span>
+              {words.doseLine({
+                key: dose.key,
+                at: sayMoment(dose.dueAt, zone, sheet.now),
+                state: stateWords(dose.state),
+              })}
+            </span>
+          </Link>
+        </li>
+      ))}
+    </ol>
+  )
   return (
     <nav aria-label={words.doses} className="dose-picker">
-      <ol>
-        {sheet.calendar.map((dose) => (
-          <li key={dose.key}>
-            <Link
-              to={`${paths.orderSheet(sheet.number)}?dose=${dose.key}`}
-              aria-current={dose.key === sheet.key ? 'true' : undefined}
-            >
-              <StepPicture state={marks[dose.state]} />
-              <span>
-                {words.doseLine({
-                  key: dose.key,
-                  at: sayMoment(dose.dueAt, zone, sheet.now),
-                  state: stateWords(dose.state),
-                })}
-              </span>
-            </Link>
-          </li>
-        ))}
-      </ol>
+      {calendar.length <= mostShown ? (
+        list
+      ) : (
+        <details>
+          <summary>{words.allDoses({ count: calendar.length })}</summary>
+          {list}
+        </details>
+      )}
     </nav>
   )
 }

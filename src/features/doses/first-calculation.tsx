@@ -71,7 +71,7 @@ export function FirstCalculation({
 /** Whether another person has calculated and agrees; until then, who may. */
 export function SecondStanding({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const { first, second, secondNeeded } = sheet
-  if (!secondNeeded) return null
+  if (!secondNeeded) return <p className="t-note">{words.secondNotNeeded}</p>
   const isCurrent = first !== null && second !== null && second.at >= first.at
   return (
     <section className="stack" aria-live="polite">

@@ -86,9 +86,15 @@ export function WholeSheet({
         }
       >
         <Standing sheet={sheet} zone={zone} />
-        <DosePicker sheet={sheet} zone={zone} />
-        {running ? <RunningSteps sheet={sheet} record={record} zone={zone} /> : null}
+        {act === 'in-the-water' ? (
+          <section className="sheet-standing">
+            <h2 className="t-head">{timerWords.inWater}</h2>
+            <p>{timerWords.inWaterBody}</p>
+          </section>
+        ) : null}
+        {running ? null : <DosePicker sheet={sheet} zone={zone} />}
         {act === 'done' ? null : <StopCriteria sheet={sheet} />}
+        {running ? <RunningSteps sheet={sheet} record={record} zone={zone} /> : null}
         <WhatGoesIn sheet={sheet} zone={zone} />
         {open ? (
           <>
@@ -104,6 +110,7 @@ export function WholeSheet({
           </>
         ) : null}
         <RecordedDoses sheet={sheet} zone={zone} />
+        {running ? <DosePicker sheet={sheet} zone={zone} /> : null}
         <div className="row row-wrap">
           {sheet.may.includes('dose.record') ? (
             <Button onClick={() => ask('record')}>{words.record}</Button>
