@@ -91,7 +91,7 @@ it('an urgent call stands over everything until somebody says that they see to i
       noticeId,
       urgent: true,
       words: 'Two lie on the floor.',
-      happenedAt: new Date().toISOString(),
+      happenedAt: app.clock.now().toISOString(),
     }),
     headers: { origin: app.url },
   })
