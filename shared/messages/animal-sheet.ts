@@ -92,6 +92,7 @@ export const animalWords = defineMessages({
   keptBecause: (p: { reason: string }) => `kept: ${p.reason}`,
   outsideRange: 'outside the plausible range',
   strike: 'Strike out',
+  moveLine: (p: { from: string; to: string }) => `${p.from} to ${p.to}`,
 
   counts: 'Count',
   countLine: 'Ledger',

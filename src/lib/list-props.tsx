@@ -1,12 +1,11 @@
 import type { ReactNode } from 'react'
 import type { UseQueryResult } from '@tanstack/react-query'
-import { sayTime } from '../../shared/messages/say-date.ts'
 import { partWords } from '../../shared/messages/parts.ts'
 import { Button } from '../ui/button.tsx'
 import type { DataTableProps, TableSort } from '../ui/data-table.tsx'
-import { ListEmpty, ListFetching, ListUnreadable } from '../ui/list-states.tsx'
+import { ListEmpty, ListFetching } from '../ui/list-states.tsx'
 import type { ListState } from './list-state.ts'
-import { isProblem } from './problem-error.ts'
+import { unreadable } from './query-standing.tsx'
 
 export interface ServerPage<Row> {
   rows: Row[]
@@ -44,25 +43,18 @@ export function listProps<Row extends object>(given: {
   const page = query.data
   const sort = sortOf(list, given.usualSort)
   const old = query.isError && page !== undefined
-  const unreadable = isProblem(query.error) ? (
-    <ListUnreadable
-      why={query.error.says}
-      code={query.error.requestId}
-      oldFrom={page ? sayTime(new Date(query.dataUpdatedAt).toISOString(), given.zone) : null}
-      onRetry={() => void query.refetch()}
-    />
-  ) : null
+  const above = unreadable(query, given.zone)
   const shared = {
     rows: page?.rows ?? [],
     sort,
     onSort: (next: TableSort) => list.set({ sort: next.column, direction: next.direction }),
     old,
   }
-  if (!page) return { ...shared, instead: unreadable ?? <ListFetching what={given.what} /> }
+  if (!page) return { ...shared, instead: above ?? <ListFetching what={given.what} /> }
   if (page.rows.length === 0)
     return {
       ...shared,
-      above: unreadable,
+      above,
       instead: list.narrowed ? (
         <ListEmpty
           title={partWords.noneMatch}
@@ -78,7 +70,7 @@ export function listProps<Row extends object>(given: {
     }
   return {
     ...shared,
-    above: unreadable,
+    above,
     paging: {
       kind: 'server',
       from: list.from,

@@ -8,6 +8,7 @@ import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { taxonGroupNames } from '../../../shared/messages/animals.ts'
 import { addressOf } from '../../lib/api-client.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
+import { choicesOf, FilterSelect } from '../../lib/filter-select.tsx'
 import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
@@ -19,7 +20,6 @@ import { DownloadLink } from '../../ui/download-link.tsx'
 import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
-import { SelectField } from '../../ui/select-field.tsx'
 import { countText } from './animal-name.ts'
 import { sayDayOrTime } from './say-day-or-time.ts'
 import { animalListQuery } from './queries.ts'
@@ -135,37 +135,32 @@ export function AnimalList() {
       search={<SearchField label={words.find} list={list} />}
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="group"
             label={words.group}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.allGroups },
-              ...groups.map((value) => ({ value, label: taxonGroupNames[value] })),
-            ]}
-            value={filter.group ?? ''}
-            onChange={(event) => list.set({ group: event.target.value })}
+            any={words.allGroups}
+            options={choicesOf(groups, taxonGroupNames)}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="form"
             label={words.form}
-            startsEmpty={false}
+            any={words.bothForms}
             options={[
-              { value: '', label: words.bothForms },
               { value: 'individual', label: words.individuals },
               { value: 'group', label: words.groups },
             ]}
-            value={filter.form ?? ''}
-            onChange={(event) => list.set({ form: event.target.value })}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="state"
             label={words.state}
-            startsEmpty={false}
+            any={words.stateHere}
             options={[
-              { value: '', label: words.stateHere },
               { value: 'gone', label: words.stateGone },
               { value: 'all', label: words.stateAll },
             ]}
-            value={filter.state ?? ''}
-            onChange={(event) => list.set({ state: event.target.value })}
           />
         </Filters>
       }

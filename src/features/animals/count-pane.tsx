@@ -6,16 +6,17 @@ import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { countKindNames } from '../../../shared/messages/animals.ts'
 import { useMay } from '../../lib/may.ts'
 import { paths } from '../../lib/paths.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListFetching } from '../../ui/list-states.tsx'
 import { countText } from './animal-name.ts'
 import { AdjustDialog, BirthsDialog, CountDialog } from './count-dialogs.tsx'
 import { MergeDialog } from './merge-dialog.tsx'
 import { countsQuery } from './queries.ts'
 import { SplitDialog } from './split-dialog.tsx'
+import { strikeColumn } from './strike-column.tsx'
 import { StrikeDialog } from './strike-dialog.tsx'
 import type { ToStrike } from './strike-dialog.tsx'
 
@@ -23,7 +24,8 @@ type Counts = { lines: CountLine[]; deaths: { id: string; struck: unknown }[] }
 
 /** The count of a group: its ledger with the running sum, and what can be recorded of it. */
 export function CountPane({ animal, zone, now }: { animal: Animal; zone: string; now: string }) {
-  const { data, isPending } = useQuery(countsQuery(animal.accession))
+  const query = useQuery(countsQuery(animal.accession))
+  const data = query.data
   const [open, setOpen] = useState<'births' | 'count' | 'split' | 'merge' | 'adjust' | null>(null)
   const [striking, setStriking] = useState<ToStrike | null>(null)
   const mayCount = useMay('observation.record')
@@ -77,7 +79,7 @@ export function CountPane({ animal, zone, now }: { animal: Animal; zone: string;
           ) : null}
         </div>
       ) : null}
-      {isPending ? <ListFetching what={words.countLine} rows={2} /> : null}
+      <QueryStanding query={query} what={words.countLine} rows={2} />
       {data ? (
         <DataTable
           label={words.countLine}
@@ -139,29 +141,10 @@ function columnsOf(p: {
       cell: (row) => (row.balance === null ? '' : <b>{row.balance.toLocaleString('en-GB')}</b>),
     },
     { id: 'by', heading: words.by, cell: (row) => row.recordedBy },
-    ...(p.onStrike
-      ? [
-          {
-            id: 'strike',
-            heading: '',
-            cell: (row: CountLine) =>
-              row.struck || !strikable.has(row.kind) ? null : (
-                <Button
-                  kind="plain"
-                  size="small"
-                  onClick={() =>
-                    p.onStrike?.({
-                      kind: 'count',
-                      recordId: row.id,
-                      what: `${kindWords(row.kind)}, ${signed(row.delta)}`,
-                    })
-                  }
-                >
-                  {words.strike}
-                </Button>
-              ),
-          },
-        ]
-      : []),
+    ...strikeColumn(p.onStrike, (row: CountLine) =>
+      row.struck || !strikable.has(row.kind)
+        ? null
+        : { kind: 'count', recordId: row.id, what: `${kindWords(row.kind)}, ${signed(row.delta)}` },
+    ),
   ]
 }

@@ -8,12 +8,13 @@ import type { Animal, MoveEntry } from '../../../shared/contracts/animals.contra
 import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { useMay } from '../../lib/may.ts'
 import { paths } from '../../lib/paths.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListFetching } from '../../ui/list-states.tsx'
 import { movesQuery } from './queries.ts'
+import { strikeColumn } from './strike-column.tsx'
 import { StrikeDialog } from './strike-dialog.tsx'
 import type { ToStrike } from './strike-dialog.tsx'
 
@@ -29,7 +30,8 @@ export function MovesPane({
   now: string
   onMove: () => void
 }) {
-  const { data, isPending } = useQuery(movesQuery(animal.accession))
+  const query = useQuery(movesQuery(animal.accession))
+  const data = query.data
   const [striking, setStriking] = useState<ToStrike | null>(null)
   const may = useMay('animal.move')
   return (
@@ -44,7 +46,7 @@ export function MovesPane({
           </Button>
         ) : null}
       </div>
-      {isPending ? <ListFetching what={words.moves} rows={2} /> : null}
+      <QueryStanding query={query} what={words.moves} rows={2} />
       {data ? (
         <DataTable
           label={words.moves}
@@ -97,29 +99,17 @@ function columnsOf(p: {
       ),
     },
     { id: 'by', heading: words.by, cell: (row) => row.recordedBy },
-    ...(p.onStrike
-      ? [
-          {
-            id: 'strike',
-            heading: '',
-            cell: (row: MoveEntry) =>
-              row.struck || row.kind !== 'move' ? null : (
-                <Button
-                  kind="plain"
-                  size="small"
-                  onClick={() =>
-                    p.onStrike?.({
-                      kind: 'move',
-                      recordId: row.id,
-                      what: `${row.from?.code ?? ''} \u2192 ${row.to?.code ?? ''}`,
-                    })
-                  }
-                >
-                  {words.strike}
-                </Button>
-              ),
+    ...strikeColumn(p.onStrike, (row: MoveEntry) =>
+      row.struck || row.kind !== 'move'
+        ? null
+        : {
+            kind: 'move',
+            recordId: row.id,
+            what: words.moveLine({
+              from: row.from?.code ?? words.outside,
+              to: row.to?.code ?? words.outside,
+            }),
           },
-        ]
-      : []),
+    ),
   ]
 }

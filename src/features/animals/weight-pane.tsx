@@ -6,13 +6,14 @@ import { animalWords as words, rangeWords } from '../../../shared/messages/anima
 import { basisNames } from '../../../shared/messages/animals.ts'
 import { useMay } from '../../lib/may.ts'
 import { usePreference } from '../../lib/preferences.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
-import { ListFetching } from '../../ui/list-states.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { weightsQuery } from './queries.ts'
+import { strikeColumn } from './strike-column.tsx'
 import { StrikeDialog } from './strike-dialog.tsx'
 import type { ToStrike } from './strike-dialog.tsx'
 import { WeightChart } from './weight-chart.tsx'
@@ -31,7 +32,8 @@ export function WeightPane({
   now: string
   onWeigh: () => void
 }) {
-  const { data: weights, isPending } = useQuery(weightsQuery(animal.accession))
+  const query = useQuery(weightsQuery(animal.accession))
+  const weights = query.data
   const [listed, setListed] = useState(false)
   const [striking, setStriking] = useState<ToStrike | null>(null)
   const preferred = usePreference('massUnit')
@@ -67,7 +69,7 @@ export function WeightPane({
           </Button>
         </div>
       </div>
-      {isPending ? <ListFetching what={words.weights} rows={2} /> : null}
+      <QueryStanding query={query} what={words.weights} rows={2} />
       {weights && !newest ? (
         <p className="t-2">
           {words.neverWeighed}. {words.neverWeighedHint}
@@ -156,29 +158,14 @@ function columnsOf(p: {
       ),
     },
     { id: 'by', heading: words.by, cell: (row) => row.recordedBy },
-    ...(p.onStrike
-      ? [
-          {
-            id: 'strike',
-            heading: '',
-            cell: (row: WeightEntry) =>
-              row.struck ? null : (
-                <Button
-                  kind="plain"
-                  size="small"
-                  onClick={() =>
-                    p.onStrike?.({
-                      kind: 'weight',
-                      recordId: row.id,
-                      what: `${enteredWeight(row).text}, ${sayMoment(row.happenedAt, p.zone, p.now)}`,
-                    })
-                  }
-                >
-                  {words.strike}
-                </Button>
-              ),
+    ...strikeColumn(p.onStrike, (row: WeightEntry) =>
+      row.struck
+        ? null
+        : {
+            kind: 'weight',
+            recordId: row.id,
+            what: `${enteredWeight(row).text}, ${sayMoment(row.happenedAt, p.zone, p.now)}`,
           },
-        ]
-      : []),
+    ),
   ]
 }

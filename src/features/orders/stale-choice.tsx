@@ -115,19 +115,17 @@ export function StaleChoice({
       <h2 className="t-head">{words.staleTitle}</h2>
       <p>{rows.length === 0 ? words.staleNone : words.staleBody}</p>
       {rows.length === 0 ? null : (
-        <div className="cards-when-narrow">
-          <DataTable
-            label={words.staleTitle}
-            density="close"
-            rowKey={(row) => row.name}
-            rows={rows}
-            columns={[
-              { id: 'name', heading: words.staleField, cell: (row) => labels()[row.name] },
-              { id: 'theirs', heading: words.staleTheirs, cell: (row) => row.theirs },
-              { id: 'mine', heading: words.staleMine, cell: (row) => row.mine },
-            ]}
-          />
-        </div>
+        <DataTable
+          label={words.staleTitle}
+          density="close"
+          rowKey={(row) => row.name}
+          rows={rows}
+          columns={[
+            { id: 'name', heading: words.staleField, cell: (row) => labels()[row.name] },
+            { id: 'theirs', heading: words.staleTheirs, cell: (row) => row.theirs },
+            { id: 'mine', heading: words.staleMine, cell: (row) => row.mine },
+          ]}
+        />
       )}
       <div className="row row-wrap">
         <Button kind="primary" disabled={busy} onClick={onMine}>

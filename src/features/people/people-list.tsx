@@ -5,6 +5,7 @@ import type { PersonRow } from '../../../shared/contracts/people.contract.ts'
 import { roles } from '../../../shared/domain/permissions/roles.ts'
 import { licenceSummaries, peopleWords, roleTitles } from '../../../shared/messages/people.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
+import { choicesOf, FilterSelect } from '../../lib/filter-select.tsx'
 import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
@@ -15,7 +16,6 @@ import type { TableColumn } from '../../ui/data-table-columns.ts'
 import { DataTable } from '../../ui/data-table.tsx'
 import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
-import { SelectField } from '../../ui/select-field.tsx'
 import { Tag } from '../../ui/tag.tsx'
 import { peopleListQuery } from './queries.ts'
 import type { PeopleQuery } from './queries.ts'
@@ -86,26 +86,22 @@ export function PeopleList() {
       search={<SearchField label={peopleWords.search} list={list} />}
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="role"
             label={peopleWords.role}
-            startsEmpty={false}
-            options={[
-              { value: '', label: peopleWords.everyRole },
-              ...roles.map((role) => ({ value: role, label: roleTitles[role] })),
-            ]}
-            value={filter.role ?? ''}
-            onChange={(event) => list.set({ role: event.target.value })}
+            any={peopleWords.everyRole}
+            options={choicesOf(roles, roleTitles)}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="active"
             label={peopleWords.account}
-            startsEmpty={false}
+            any={peopleWords.everyAccount}
             options={[
-              { value: '', label: peopleWords.everyAccount },
               { value: 'yes', label: peopleWords.open },
               { value: 'no', label: peopleWords.closed },
             ]}
-            value={filter.active ?? ''}
-            onChange={(event) => list.set({ active: event.target.value })}
           />
         </Filters>
       }

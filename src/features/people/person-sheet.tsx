@@ -6,10 +6,10 @@ import { licenceSummaries, peopleWords, roleTitles } from '../../../shared/messa
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
-import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { CorrectPersonForm } from './correct-person-form.tsx'
 import { LicenceList } from './licence-list.tsx'
@@ -24,7 +24,6 @@ export function PersonSheet({ id }: { id: string }) {
   const [loaded, setLoaded] = useState(0)
   const issue = useIssueOneTimePassword(id)
   const person = query.data
-  const problem = isProblem(query.error) ? query.error : null
 
   return (
     <Sheet recipe="list">
@@ -50,15 +49,11 @@ export function PersonSheet({ id }: { id: string }) {
         ) : null}
       </Area>
       <Area className="pane stack gap-6">
-        {problem ? (
-          <ListUnreadable
-            title={problem.code === 'not-found' ? peopleWords.notHere : undefined}
-            why={problem.says}
-            code={problem.requestId}
-            onRetry={() => void query.refetch()}
-          />
-        ) : null}
-        {query.isPending ? <ListFetching what={peopleWords.list} /> : null}
+        <QueryStanding
+          query={query}
+          what={peopleWords.list}
+          titleOf={({ code }) => (code === 'not-found' ? peopleWords.notHere : undefined)}
+        />
         {person ? (
           <>
             <CorrectPersonForm

@@ -34,6 +34,7 @@ const columns = (names: CaseDetail['names'], zone: string): TableColumn<CaseRow>
   {
     id: 'animals',
     heading: words.animalsHead,
+    narrow: 'head',
     cell: (row) => (
       <>
         <b className="t-strong">{row.name}</b>

@@ -166,7 +166,7 @@ export function QuarantineBoard() {
               </ListEmpty>
             </div>
           ) : rowsAs === 'table' ? (
-            <div className="pane cards-when-narrow">
+            <div className="pane">
               <BoardTable rows={rows} names={reply.names} zone={zone} />
             </div>
           ) : (

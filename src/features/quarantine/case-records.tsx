@@ -71,6 +71,7 @@ const batchColumns = (zone: string, now: string): TableColumn<CaseMember>[] => [
   {
     id: 'animal',
     heading: words.animal,
+    narrow: 'head',
     cell: (row) => (
       <>
         {row.name}
@@ -82,11 +83,13 @@ const batchColumns = (zone: string, now: string): TableColumn<CaseMember>[] => [
   {
     id: 'count',
     heading: words.count,
+    narrow: 'short',
     cell: (row) => (row.animals.high === 0 ? words.gone : animalsText(row.animals)),
   },
   {
     id: 'place',
     heading: words.place,
+    narrow: 'short',
     cell: (row) =>
       row.enclosure === null ? (
         <span className="t-2">{words.gone}</span>
@@ -100,7 +103,7 @@ const batchColumns = (zone: string, now: string): TableColumn<CaseMember>[] => [
 /** Animals and groups of the batch, those that died included. */
 export function BatchTable({ of: detail, zone }: RecordsProps) {
   return (
-    <section aria-labelledby="case-batch" className="cards-when-narrow">
+    <section aria-labelledby="case-batch">
       <h2 id="case-batch" className="t-head">
         {words.batch}
       </h2>
@@ -208,7 +211,7 @@ const eventColumns = (zone: string, now: string): TableColumn<EventRow>[] => [
 /** Events entered for the case, the newest first. */
 export function EventTable({ of: detail, zone }: RecordsProps) {
   return (
-    <section aria-labelledby="case-events" className="cards-when-narrow">
+    <section aria-labelledby="case-events">
       <h2 id="case-events" className="t-head">
         {words.events}
       </h2>

@@ -23,7 +23,7 @@ export function CaseSteps({
   const running = detail.legs.find((leg) => leg.endedOn === null)
   const earlier = detail.legs.filter((leg) => leg.endedOn !== null && leg.steps.length > 0)
   return (
-    <section aria-labelledby="case-steps" className="cards-when-narrow">
+    <section aria-labelledby="case-steps">
       <h2 id="case-steps" className="t-head">
         {words.steps}
       </h2>
@@ -63,57 +63,64 @@ function StepTable({
 }) {
   return (
     <div className="table-scroll">
-      <table className="data-table" aria-label={label}>
-        <thead>
-          <tr>
-            <th scope="col">
+      <table role="table" className="data-table" aria-label={label}>
+        <thead role="rowgroup">
+          <tr role="row">
+            <th role="columnheader" scope="col">
               <span className="visually-hidden">{words.stepState}</span>
             </th>
-            <th scope="col" className="is-number">
+            <th role="columnheader" scope="col" className="is-number">
               {words.stepDay}
             </th>
-            <th scope="col">{words.stepDate}</th>
-            <th scope="col">{words.step}</th>
-            <th scope="col">{words.stepResult}</th>
+            <th role="columnheader" scope="col">
+              {words.stepDate}
+            </th>
+            <th role="columnheader" scope="col">
+              {words.step}
+            </th>
+            <th role="columnheader" scope="col">
+              {words.stepResult}
+            </th>
             {onRecord ? (
-              <th scope="col">
+              <th role="columnheader" scope="col">
                 <span className="visually-hidden">{words.stepAct}</span>
               </th>
             ) : null}
           </tr>
         </thead>
-        <tbody>
+        <tbody role="rowgroup">
           {steps.map((step) => (
             <tr
               key={step.key}
+              role="row"
               className={classNames(
                 step.state === 'due' && 'is-selected',
                 step.state === 'overdue' && 'is-late',
               )}
             >
-              <td className="w-9" data-heading={words.stepState}>
+              <td role="cell" className="is-head w-9">
                 <StepPicture state={step.state} />
                 <span className="visually-hidden">{stateWords(step.state)}</span>
               </td>
-              <td className="is-number" data-heading={words.stepDay}>
+              <td role="cell" className="is-number is-short" data-label={words.stepDay}>
                 {step.day === step.untilDay
                   ? step.day
                   : words.dayWindow({ from: step.day, until: step.untilDay })}
               </td>
-              <td className="num" data-heading={words.stepDate}>
+              <td role="cell" className="num is-short" data-label={words.stepDate}>
                 {windowText(step, today)}
               </td>
-              <td className={step.state === 'due' ? 't-strong' : undefined} data-heading={words.step}>
+              <td role="cell" className={classNames('is-head', step.state === 'due' && 't-strong')}>
                 <span>{step.name}</span>
                 {step.state === 'overdue' ? (
                   <span className="late-words">{quarantineWords.lateDays({ days: step.lateDays })}</span>
                 ) : null}
               </td>
-              <td className="t-2" data-heading={words.stepResult}>
+              <td role="cell" className="t-2" data-label={words.stepResult}>
                 {resultText(step)}
               </td>
               {onRecord ? (
-                <td data-heading={words.stepAct}>
+                <td role="cell" data-label="">
                   {recordable(step) ? (
                     <Button
                       size="small"

@@ -10,6 +10,7 @@ import { parameterNames, phScaleNames, readingLevels } from '../../../shared/mes
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { addressOf } from '../../lib/api-client.ts'
+import { FilterSelect } from '../../lib/filter-select.tsx'
 import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMay } from '../../lib/may.ts'
@@ -22,7 +23,6 @@ import type { TableColumn } from '../../ui/data-table-columns.ts'
 import { DownloadLink } from '../../ui/download-link.tsx'
 import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
-import { SelectField } from '../../ui/select-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
 import { useVoidRecord } from './mutations.ts'
 import { readingListQuery } from './queries.ts'
@@ -131,15 +131,12 @@ export function ReadingList({ code }: { code: string }) {
       }
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="parameter"
             label={readingWords.parameter}
-            startsEmpty={false}
-            options={[
-              { value: '', label: readingWords.allParameters },
-              ...readingParameters.map((value) => ({ value, label: parameterHeading(value) })),
-            ]}
-            value={filter.parameter ?? ''}
-            onChange={(event) => list.set({ parameter: event.target.value })}
+            any={readingWords.allParameters}
+            options={readingParameters.map((value) => ({ value, label: parameterHeading(value) }))}
           />
           <Tick
             label={readingWords.withVoided}

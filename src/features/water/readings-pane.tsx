@@ -6,9 +6,8 @@ import type { ReadingParameter } from '../../../shared/domain/readings/parameter
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { paths } from '../../lib/paths.ts'
 import { usePreference } from '../../lib/preferences.ts'
-import { isProblem } from '../../lib/problem-error.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
-import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { SegmentedChoice } from '../../ui/segmented-choice.tsx'
 import { parametersOf } from './parameter-order.ts'
 import { readingSeriesQuery } from './queries.ts'
@@ -64,20 +63,9 @@ export function ReadingsPane({
           ) : null}
         </span>
       </div>
-      {isProblem(series.error) ? (
-        <div className="px-4">
-          <ListUnreadable
-            why={series.error.says}
-            code={series.error.requestId}
-            onRetry={() => void series.refetch()}
-          />
-        </div>
-      ) : null}
-      {series.isPending ? (
-        <div className="px-4">
-          <ListFetching what={readingWords.rows} />
-        </div>
-      ) : null}
+      <div className="px-4">
+        <QueryStanding query={series} what={readingWords.rows} />
+      </div>
       {series.data && parameters.length === 0 ? (
         <p className="px-4 pb-4 t-2">{readingWords.noneEver}</p>
       ) : null}

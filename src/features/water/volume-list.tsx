@@ -14,13 +14,13 @@ import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { ListEmpty } from '../../ui/list-states.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { Tag } from '../../ui/tag.tsx'
@@ -63,20 +63,9 @@ export function VolumeList({ water }: { water: WaterOfEnclosure }) {
         ) : null}
       </Area>
       <Area>
-        {isProblem(query.error) ? (
-          <div className="px-4">
-            <ListUnreadable
-              why={query.error.says}
-              code={query.error.requestId}
-              onRetry={() => void query.refetch()}
-            />
-          </div>
-        ) : null}
-        {query.isPending ? (
-          <div className="px-4">
-            <ListFetching what={volumeWords.versionsTitle} />
-          </div>
-        ) : null}
+        <div className="px-4">
+          <QueryStanding query={query} what={volumeWords.versionsTitle} />
+        </div>
         {query.data?.length === 0 ? (
           <div className="px-4">
             <ListEmpty title={volumeWords.noVersions} />

@@ -8,6 +8,7 @@ import { parameterNames } from '../../../shared/messages/water.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { addressOf } from '../../lib/api-client.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
+import { choicesOf, FilterSelect } from '../../lib/filter-select.tsx'
 import { listProps } from '../../lib/list-props.tsx'
 import { useListState } from '../../lib/list-state.ts'
 import { useMe } from '../../lib/me.ts'
@@ -20,7 +21,6 @@ import { DownloadLink } from '../../ui/download-link.tsx'
 import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
-import { SelectField } from '../../ui/select-field.tsx'
 import { netVolumeText, volumeUnitOf } from './net-volume.tsx'
 import { waterListQuery } from './queries.ts'
 import type { WaterListQuery } from './queries.ts'
@@ -146,25 +146,19 @@ export function WaterList() {
       search={<SearchField label={waterWords.find} list={list} />}
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="area"
             label={waterWords.area}
-            startsEmpty={false}
-            options={[
-              { value: '', label: waterWords.allAreas },
-              ...(reply?.areas ?? []).map((area) => ({ value: area, label: area })),
-            ]}
-            value={filter.area ?? ''}
-            onChange={(event) => list.set({ area: event.target.value })}
+            any={waterWords.allAreas}
+            options={(reply?.areas ?? []).map((area) => ({ value: area, label: area }))}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="state"
             label={waterWords.state}
-            startsEmpty={false}
-            options={[
-              { value: '', label: waterWords.everyState },
-              ...states.map((state) => ({ value: state, label: stateWords()[state] })),
-            ]}
-            value={filter.state ?? ''}
-            onChange={(event) => list.set({ state: event.target.value })}
+            any={waterWords.everyState}
+            options={choicesOf(states, stateWords())}
           />
         </Filters>
       }

@@ -9,11 +9,11 @@ import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
-import { ListEmpty, ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
+import { ListEmpty } from '../../ui/list-states.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { BodyDialog, ConnectionDialog, MachineDialog } from './map-dialogs.tsx'
 import { orderedWaters } from './ordered-waters.ts'
@@ -56,20 +56,9 @@ export function WaterMapSheet() {
         ) : null}
       </Area>
       <Area>
-        {isProblem(query.error) ? (
-          <div className="px-4">
-            <ListUnreadable
-              why={query.error.says}
-              code={query.error.requestId}
-              onRetry={() => void query.refetch()}
-            />
-          </div>
-        ) : null}
-        {query.isPending ? (
-          <div className="px-4">
-            <ListFetching what={mapWords.title} />
-          </div>
-        ) : null}
+        <div className="px-4">
+          <QueryStanding query={query} what={mapWords.title} />
+        </div>
         {map && waters.length === 0 ? (
           <div className="px-4">
             <ListEmpty title={mapWords.none} />

@@ -3,10 +3,9 @@ import { useQuery } from '@tanstack/react-query'
 import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
 import { paths } from '../../lib/paths.ts'
-import { isProblem } from '../../lib/problem-error.ts'
+import { QueryStanding } from '../../lib/query-standing.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
-import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { enclosureWaterQuery } from './queries.ts'
 
@@ -20,25 +19,22 @@ export function WithEnclosureWater({
 }) {
   const query = useQuery(enclosureWaterQuery(code))
   if (query.data) return children(query.data)
-  const problem = isProblem(query.error) ? query.error : null
-  const isMissing = problem?.code === 'not-found' || problem?.code === 'bad-input'
   return (
     <Sheet recipe="list">
       <Area>
         <Cartouche place={waterWords.title} title={code} />
       </Area>
       <Area className="pane">
-        {problem ? (
-          <ListUnreadable
-            title={isMissing ? waterWords.noSuchEnclosure({ code }) : undefined}
-            why={problem.says}
-            code={problem.requestId}
-            onRetry={() => void query.refetch()}
-            act={<ButtonLink to={paths.water()}>{waterWords.showAll}</ButtonLink>}
-          />
-        ) : (
-          <ListFetching what={code} />
-        )}
+        <QueryStanding
+          query={query}
+          what={code}
+          titleOf={(problem) =>
+            ['not-found', 'bad-input'].includes(problem.code)
+              ? waterWords.noSuchEnclosure({ code })
+              : undefined
+          }
+          act={<ButtonLink to={paths.water()}>{waterWords.showAll}</ButtonLink>}
+        />
       </Area>
     </Sheet>
   )

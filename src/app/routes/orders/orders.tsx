@@ -4,6 +4,7 @@ import { orderPhases } from '../../../../shared/contracts/orders.contract.ts'
 import { orderListWords as words, orderPhaseNames } from '../../../../shared/messages/orders-screens.ts'
 import { everyEnclosure } from '../../../features/enclosures/index.ts'
 import { ordersAsked, ordersCsvAddress, OrdersList } from '../../../features/orders/index.ts'
+import { choicesOf, FilterSelect } from '../../../lib/filter-select.tsx'
 import { useListState } from '../../../lib/list-state.ts'
 import { useMay } from '../../../lib/may.ts'
 import { paths } from '../../../lib/paths.ts'
@@ -12,7 +13,6 @@ import { ButtonLink } from '../../../ui/button-link.tsx'
 import { DownloadLink } from '../../../ui/download-link.tsx'
 import { Filters } from '../../../ui/filters.tsx'
 import { ListSheet } from '../../../ui/list-sheet.tsx'
-import { SelectField } from '../../../ui/select-field.tsx'
 import { useSheetTitle } from '../../shell/use-sheet-title.ts'
 
 /** Treatment orders. */
@@ -38,29 +38,22 @@ export function Component() {
       search={<SearchField label={words.search} list={list} />}
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="phase"
             label={words.phase}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.anyPhase },
-              { value: 'open', label: words.open },
-              ...orderPhases.map((value) => ({ value, label: orderPhaseNames[value] })),
-            ]}
-            value={asked.phase ?? ''}
-            onChange={(event) => list.set({ phase: event.target.value })}
+            any={words.anyPhase}
+            options={[{ value: 'open', label: words.open }, ...choicesOf(orderPhases, orderPhaseNames)]}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="enclosure"
             label={words.enclosure}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.anyEnclosure },
-              ...(enclosures?.rows ?? []).map((row) => ({
-                value: row.code,
-                label: `${row.code}, ${row.name}`,
-              })),
-            ]}
-            value={asked.enclosureCode ?? ''}
-            onChange={(event) => list.set({ enclosure: event.target.value })}
+            any={words.anyEnclosure}
+            options={(enclosures?.rows ?? []).map((row) => ({
+              value: row.code,
+              label: `${row.code}, ${row.name}`,
+            }))}
           />
         </Filters>
       }

@@ -4,6 +4,7 @@ import { permitWords as words } from '../../../../shared/messages/permits-sheet.
 import { permitKindNames, permitStateNames } from '../../../../shared/messages/register-kinds.ts'
 import { registerWords } from '../../../../shared/messages/register-sheet.ts'
 import { permitsAsked, permitsCsvAddress, PermitsList } from '../../../features/permits/index.ts'
+import { choicesOf, FilterSelect } from '../../../lib/filter-select.tsx'
 import { useListState } from '../../../lib/list-state.ts'
 import { useMay } from '../../../lib/may.ts'
 import { paths } from '../../../lib/paths.ts'
@@ -12,7 +13,6 @@ import { ButtonLink } from '../../../ui/button-link.tsx'
 import { DownloadLink } from '../../../ui/download-link.tsx'
 import { Filters } from '../../../ui/filters.tsx'
 import { ListSheet } from '../../../ui/list-sheet.tsx'
-import { SelectField } from '../../../ui/select-field.tsx'
 import { Tick } from '../../../ui/tick.tsx'
 import { useSheetTitle } from '../../shell/use-sheet-title.ts'
 import { RegisterPages } from './register-pages.tsx'
@@ -43,25 +43,19 @@ export function Component() {
       search={<SearchField label={words.search} list={list} />}
       filters={
         <Filters {...list.filters}>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="state"
             label={words.state}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.anyState },
-              ...states.map((value) => ({ value, label: permitStateNames[value] })),
-            ]}
-            value={asked.state ?? ''}
-            onChange={(event) => list.set({ state: event.target.value })}
+            any={words.anyState}
+            options={choicesOf(states, permitStateNames)}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="kind"
             label={words.kind}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.anyKind },
-              ...permitKinds.map((value) => ({ value, label: permitKindNames[value] })),
-            ]}
-            value={asked.kind ?? ''}
-            onChange={(event) => list.set({ kind: event.target.value })}
+            any={words.anyKind}
+            options={choicesOf(permitKinds, permitKindNames)}
           />
           <Tick
             label={words.onlyOpen}

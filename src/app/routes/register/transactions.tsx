@@ -7,6 +7,7 @@ import {
   transactionsAsked,
   transactionsCsvAddress,
 } from '../../../features/acquisitions/index.ts'
+import { choicesOf, FilterSelect } from '../../../lib/filter-select.tsx'
 import { useListState } from '../../../lib/list-state.ts'
 import { useMay } from '../../../lib/may.ts'
 import { paths } from '../../../lib/paths.ts'
@@ -16,7 +17,6 @@ import { ChoiceField } from '../../../ui/choice-field.tsx'
 import { DownloadLink } from '../../../ui/download-link.tsx'
 import { Filters } from '../../../ui/filters.tsx'
 import { ListSheet } from '../../../ui/list-sheet.tsx'
-import { SelectField } from '../../../ui/select-field.tsx'
 import { TextField } from '../../../ui/text-field.tsx'
 import { Tick } from '../../../ui/tick.tsx'
 import { useSheetTitle } from '../../shell/use-sheet-title.ts'
@@ -60,15 +60,12 @@ export function Component() {
             value={asked.way ?? 'both'}
             onChange={(way) => list.set({ way: way === 'both' ? undefined : way })}
           />
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="kind"
             label={words.kind}
-            startsEmpty={false}
-            options={[
-              { value: '', label: words.anyKind },
-              ...kinds.map((value) => ({ value, label: transactionKindNames[value] })),
-            ]}
-            value={asked.kind ?? ''}
-            onChange={(event) => list.set({ kind: event.target.value })}
+            any={words.anyKind}
+            options={choicesOf(kinds, transactionKindNames)}
           />
           <div className="pair">
             <TextField
@@ -84,16 +81,15 @@ export function Component() {
               onChange={(event) => list.set({ until: event.target.value })}
             />
           </div>
-          <SelectField
+          <FilterSelect
+            list={list}
+            name="voided"
             label={words.standing}
-            startsEmpty={false}
+            any={words.withVoided}
             options={[
-              { value: '', label: words.withVoided },
               { value: 'no', label: words.onlyStanding },
               { value: 'yes', label: words.onlyVoided },
             ]}
-            value={asked.voided ?? ''}
-            onChange={(event) => list.set({ voided: event.target.value })}
           />
           <Tick
             label={words.onlyOpen}
