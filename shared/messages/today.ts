@@ -12,12 +12,10 @@ export const todayWords = defineMessages({
   ownFirst: 'Your own lane comes first.',
   waits: (p: { count: number }) => `${counted(p.count, 'item waits', 'items wait')} for you`,
   noneWait: 'Nothing waits for you now',
-  ofThemLate: (p: { count: number; all: boolean }) =>
-    p.count === 1
-      ? 'one of them overdue'
-      : p.all
-        ? 'all of them overdue'
-        : `${String(p.count)} of them overdue`,
+  ofThemLate: (p: { count: number; all: boolean }) => {
+    if (p.all) return p.count === 1 ? 'and it is overdue' : 'all of them overdue'
+    return p.count === 1 ? 'one of them overdue' : `${String(p.count)} of them overdue`
+  },
   othersLate: (p: { count: number; more: boolean }) =>
     `${p.count === 1 ? 'One' : String(p.count)}${p.more ? ' more' : ''} ${p.count === 1 ? 'is' : 'are'} overdue in the other lanes.`,
   chooseLane: 'Lane that comes first and stands on the hour ruler',

@@ -110,6 +110,24 @@ it('an urgent call stands over everything until somebody says that they see to i
   ).toBe(0)
 })
 
+it('a note for the next watch is left, read by name, and known to have been read', async () => {
+  const words = 'UV on QS-2 off before three.'
+  const keeper = await todayOf('keeper', desk)
+  await keeper.getByRole('textbox', { name: 'Note for the next watch' }).fill(words)
+  await keeper.getByRole('button', { name: 'Leave the note' }).click()
+  const note = keeper.getByRole('article').filter({ hasText: words })
+  await note.getByText('Nobody has said yet that they have read it.').waitFor()
+  const tech = await todayOf('tech', phone)
+  const read = tech.getByRole('article').filter({ hasText: words })
+  await expectAccessible(tech, 'Today with a handover note')
+  await picture(tech, 'today-handover-390')
+  await read.getByRole('button', { name: 'I have read it' }).click()
+  await read.waitFor({ state: 'detached' })
+  await keeper.reload()
+  await note.getByText(/Read by Soren Brandt \d\d:\d\d/).waitFor()
+  await picture(keeper, 'today-handover-1440')
+})
+
 it('a hold is lifted from here, with a reason', async () => {
   const page = await todayOf('vet', desk)
   const held = page.getByRole('listitem').filter({ has: page.getByRole('link', { name: /^TO-\d+ is held/ }) })

@@ -67,8 +67,8 @@ export function TodaySheet() {
         {!reply && query.isPending ? <ListFetching what={todayWords.what} rows={6} /> : null}
         {reply && view ? (
           <>
-            {narrow ? <UnreadHandover reply={reply} zone={zone} /> : null}
             <UrgentCalls calls={view.urgent} at={reply.at} zone={zone} />
+            {narrow ? <UnreadHandover reply={reply} zone={zone} /> : null}
             <TodayBands view={view} at={reply.at} zone={zone} />
             <TodayDone items={view.done} at={reply.at} zone={zone} />
           </>
