@@ -1,8 +1,11 @@
+import { stat } from 'node:fs/promises'
 import path from 'node:path'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { aCase } from '../builders/a-case.ts'
+import { aCase, aFish } from '../builders/a-case.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
+import { aGroup } from '../builders/a-collection.ts'
+import { anEnclosure } from '../builders/a-water.ts'
 import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
@@ -246,5 +249,60 @@ describe('a keeper with wet hands, at 390 px', () => {
     expect(
       (await (await app.as('keeper')).agent.get('/api/notices?state=all').expect(200)).body.rows,
     ).toHaveLength(1)
+  })
+})
+
+describe.each([desk, phone])('the beginning and the end of a case at $width px', (size) => {
+  it('a technician opens it for everybody in a tank, and a veterinarian clears it against what is unmet', async () => {
+    const code = `N-${String(size.width)}`
+    const tank = await anEnclosure(app, code, { boundary: 'Wing' })
+    const taxonId = await aFish(app)
+    const school = await aGroup(app, { taxonId, enclosureId: tank.id, count: 6, happenedAt: ago(3) })
+    const page = await signedIn('technician', size, '/quarantine/new')
+    await page.getByRole('combobox', { name: 'Protocol' }).selectOption({ index: 1 })
+    await page.getByRole('combobox', { name: 'Or add everybody in an enclosure' }).fill(code)
+    await page.getByRole('option', { name: new RegExp(code) }).click()
+    await page.getByRole('button', { name: 'Add everybody there' }).click()
+    await page.getByRole('button', { name: `Take ${school.accession} out of the batch` }).waitFor()
+    await page.getByRole('radio', { name: 'Yes, the batch is complete' }).click()
+    await expectSound(page, 'opening a case')
+    await picture(page, `open-case-${String(size.width)}`)
+    await page.getByRole('button', { name: 'Open the case' }).click()
+    await page.waitForURL(/\/quarantine\/Q-\d+$/)
+    await page.getByText(/^Day 3 of \d+$/).waitFor()
+    const number = new URL(page.url()).pathname.split('/').at(-1) ?? ''
+
+    const other = await signedIn('unlicensed', size, `/quarantine/${number}/clearance`)
+    await other.getByText('This case can’t be cleared yet').waitFor()
+    await other
+      .getByText(/licence/i)
+      .first()
+      .waitFor()
+
+    const vet = await signedIn('veterinarian', size, `/quarantine/${number}`)
+    await vet.getByRole('link', { name: /^Clear against \d+.unmet condition/ }).click()
+    await vet
+      .getByRole('textbox', { name: 'Why it is cleared all the same' })
+      .fill('kept apart for a year before')
+    await vet.getByRole('textbox', { name: 'Your password' }).fill('not the password')
+    await vet.getByRole('button', { name: /^Clear against/ }).click()
+    await vet.getByRole('alert').waitFor()
+    await vet.getByRole('textbox', { name: 'Your password' }).fill(password)
+    await expectSound(vet, 'clearance form')
+    await picture(vet, `clearance-${String(size.width)}`)
+    await vet.getByRole('button', { name: /^Clear against/ }).click()
+    await vet.waitForURL(/\/quarantine\/Q-\d+$/)
+    await vet.getByRole('heading', { name: 'Clearance', exact: true }).waitFor()
+    await vet.getByText(/because: kept apart for a year before/).waitFor()
+    await expectSound(vet, 'cleared case')
+    await picture(vet, `cleared-${String(size.width)}`)
+    const [download] = await Promise.all([
+      vet.waitForEvent('download'),
+      vet.getByRole('link', { name: 'Clearance certificate (PDF)' }).click(),
+    ])
+    const { size: bytes } = await stat(await download.path())
+    expect(bytes).toBeGreaterThan(2000)
+    const { body } = await (await app.as('veterinarian')).agent.get(`/api/cases/${number}`).expect(200)
+    expect(body).toMatchObject({ status: 'cleared', clearance: { reason: 'kept apart for a year before' } })
   })
 })

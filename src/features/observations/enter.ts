@@ -19,4 +19,8 @@ export async function enterAndSend(client: QueryClient, item: NewItem): Promise<
   return state === undefined ? 'sent' : state === 'refused' ? 'refused' : 'kept'
 }
 
+/** Why the server did not take an entry; undefined unless it was refused. */
+export const refusalOf = (id: string): string | undefined =>
+  outbox.now().items.find((one) => one.id === id)?.refusal?.says
+
 const stateOf = (id: string) => outbox.now().items.find((one) => one.id === id)?.state

@@ -1,3 +1,5 @@
+export { enterAndSend, refusalOf } from './enter.ts'
+export { entries } from './entries.ts'
 export { ObservationSheet } from './observation-sheet.tsx'
 export { Rounds } from './rounds.tsx'
 export { Unsent } from './unsent.tsx'

@@ -1,9 +1,11 @@
 import { useState } from 'react'
+import { useQueryClient } from '@tanstack/react-query'
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
 import { lockCauseWords } from '../../../shared/messages/quarantine.ts'
 import { caseForms as words } from '../../../shared/messages/quarantine-forms.ts'
+import { observationWords } from '../../../shared/messages/observation-screens.ts'
+import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
-import { thisDevice } from '../../lib/this-device.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
@@ -15,25 +17,26 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { RecordDialog, shortestReason, WhenField } from '../animals/index.ts'
-import { useHoldCase, useLiftLock, useLockCase } from './mutations.ts'
+import { enterAndSend, entries, refusalOf } from '../observations/index.ts'
+import { useLiftLock, useLockCase } from './mutations.ts'
 
-/** Holds a case at once: no password, and no reason needed. */
+/** Holds a case at once: no password, no reason needed, and without a signal too. */
 export function HoldDialog({ number, onBack }: { number: string; onBack: () => void }) {
-  const hold = useHoldCase(number)
-  const refusal = useRefusal()
+  const me = useMe()
+  const client = useQueryClient()
   const toast = useToast()
-  const [id] = useState(newId)
   const [reason, setReason] = useState('')
+  const [busy, setBusy] = useState(false)
+  const [refused, setRefused] = useState<string>()
   const send = async () => {
-    const body = {
-      id,
-      happenedAt: new Date().toISOString(),
-      reason: typedText(reason),
-      origin: 'online' as const,
-      device: thisDevice(),
-    }
-    if (!(await refusal.attempt(() => hold.mutateAsync(body)))) return
-    toast({ words: words.recorded({ number }) })
+    setBusy(true)
+    const entry = entries.hold(me.id, number, typedText(reason))
+    const fate = await enterAndSend(client, entry)
+    setBusy(false)
+    if (fate === 'refused') return setRefused(refusalOf(entry.id))
+    toast({
+      words: fate === 'sent' ? words.recorded({ number }) : observationWords.holdKept({ number }),
+    })
     onBack()
   }
   return (
@@ -43,7 +46,7 @@ export function HoldDialog({ number, onBack }: { number: string; onBack: () => v
       typed={reason !== ''}
       acts={
         <>
-          <Button kind="hold" disabled={refusal.busy} onClick={() => void send()}>
+          <Button kind="hold" disabled={busy} onClick={() => void send()}>
             {words.holdAct}
           </Button>
           <Button onClick={onBack}>{words.keepRunning}</Button>
@@ -51,7 +54,7 @@ export function HoldDialog({ number, onBack }: { number: string; onBack: () => v
       }
     >
       <p>{words.holdBody}</p>
-      <WrongSummary fields={[]} general={refusal.general([])} />
+      <WrongSummary fields={[]} general={refused} />
       <TextareaField
         label={words.reason}
         optional

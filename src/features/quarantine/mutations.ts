@@ -59,12 +59,6 @@ export const useRecordStep = (number: string) =>
     body,
   }))
 
-export const useHoldCase = (number: string) =>
-  useQuarantineMutation(events.holdCase, (body: BodyOf<typeof events.holdCase>) => ({
-    params: { number },
-    body,
-  }))
-
 export const useLockCase = (number: string) =>
   useQuarantineMutation(events.lockCase, (body: BodyOf<typeof events.lockCase>) => ({
     params: { number },
