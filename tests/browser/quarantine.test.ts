@@ -269,7 +269,9 @@ describe.each([desk, phone])('the beginning and the end of a case at $width px',
     await picture(page, `open-case-${String(size.width)}`)
     await page.getByRole('button', { name: 'Open the case' }).click()
     await page.waitForURL(/\/quarantine\/Q-\d+$/)
-    await page.getByText(/^Day 3 of \d+$/).waitFor()
+    await page.getByRole('heading', { name: 'Before clearance' }).waitFor()
+    await picture(page, `opened-${String(size.width)}`)
+    await page.getByText(/^Day 3 of \d+$/).waitFor({ timeout: 8000 })
     const number = new URL(page.url()).pathname.split('/').at(-1) ?? ''
 
     const other = await signedIn('unlicensed', size, `/quarantine/${number}/clearance`)
@@ -286,7 +288,7 @@ describe.each([desk, phone])('the beginning and the end of a case at $width px',
       .fill('kept apart for a year before')
     await vet.getByRole('textbox', { name: 'Your password' }).fill('not the password')
     await vet.getByRole('button', { name: /^Clear against/ }).click()
-    await vet.getByRole('alert').waitFor()
+    await vet.locator('.signature .wrong').waitFor()
     await vet.getByRole('textbox', { name: 'Your password' }).fill(password)
     await expectSound(vet, 'clearance form')
     await picture(vet, `clearance-${String(size.width)}`)
@@ -304,5 +306,5 @@ describe.each([desk, phone])('the beginning and the end of a case at $width px',
     expect(bytes).toBeGreaterThan(2000)
     const { body } = await (await app.as('veterinarian')).agent.get(`/api/cases/${number}`).expect(200)
     expect(body).toMatchObject({ status: 'cleared', clearance: { reason: 'kept apart for a year before' } })
-  })
+  }, 120_000)
 })
