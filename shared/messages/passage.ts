@@ -20,6 +20,7 @@ export const passageWords = defineMessages({
   today: 'today',
   passed: 'date passed',
   readyToClear: 'ready to clear',
+  cleared: 'cleared',
   noMovement: 'No movement. Clearance date not set.',
   stepsTogether: (p: { count: number }) => `${p.count} steps close together`,
   fixName: (p: { name: string; day: number; on: string; state: string }) =>

@@ -71,8 +71,8 @@ function legOf(
   today: string,
 ): PassageLeg {
   const until = leg.endedOn
-  // while it is held nothing can be foreseen; what would come stands in the table
-  const blocked = row.held || row.status === 'locked'
+  // held or ended, nothing can be foreseen; what would come stands in the table
+  const blocked = row.held || row.status === 'locked' || hasEnded(row)
   const within = (on: string) => on >= leg.day0On && (until === null || on < until)
   const before = row.counts.filter(({ on }) => on <= leg.day0On).at(-1)
   const counts = row.counts.filter(({ on }) => on > leg.day0On && within(on))

@@ -206,9 +206,11 @@ function HarbourWords({ view, course, width }: { view: PassageView; course: Cour
       <text x={x} y={courseY - 4} className={classNames('s-18 s-b', colour)}>
         {date}
       </text>
-      <text x={x} y={courseY + 12} className="s-12 s-2">
-        {passageWords.earliestClearance}
-      </text>
+      {view.flag === 'C' ? null : (
+        <text x={x} y={courseY + 12} className="s-12 s-2">
+          {passageWords.earliestClearance}
+        </text>
+      )}
       <text x={x} y={courseY + 27} className="s-12 s-2">
         {toRun}
       </text>

@@ -61,6 +61,7 @@ export function passageSummary(view: PassageView): string {
 /** Words beside the harbour: how long still, or that all is met. */
 export function harbourWords(view: PassageView): string {
   if (!view.harbour) return ''
+  if (view.flag === 'C') return passageWords.cleared
   const days = daysBetween(view.today, view.harbour.on)
   if (days <= 0)
     return view.harbour.allMet
