@@ -183,6 +183,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await other.getByText('The first result is not on this screen.').waitFor()
     const amountField = other.getByRole('textbox', { name: /Amount that you work out/ })
     expect(await amountField.isDisabled()).toBe(true)
+    expect(await other.getByRole('button', { name: 'Hold' }).count()).toBe(1)
     await expectSound(other, 'bath-second-390')
     await fillSecond(other, '2180')
     await other.getByRole('button', { name: 'Compare with the first' }).click()

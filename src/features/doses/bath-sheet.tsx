@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Navigate } from 'react-router-dom'
 import type { UseQueryResult } from '@tanstack/react-query'
@@ -6,9 +7,11 @@ import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { PhoneSheet } from '../../ui/phone-frame.tsx'
+import { HoldDialog } from './hold-dialog.tsx'
 import { sheetQuery } from './queries.ts'
 import { SecondCalculation } from './second-calculation.tsx'
 import { doseToOpen, othersMayAct, sheetMode } from './sheet-model.ts'
@@ -54,16 +57,31 @@ export function DoseOfNow({ number }: { number: string }) {
   return <Navigate to={`${paths.orderSheet(number)}?dose=${key}`} replace />
 }
 
+/** The sheet of the second person. Holding is in reach here too: whoever reads the label may see what is wrong. */
 function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
+  const [holdAt, setHoldAt] = useState<string | null>(null)
+  const mayHold = sheet.may.includes('order.hold') && sheet.standing === null
   return (
-    <PhoneSheet
-      back={{ to: paths.order(sheet.number), label: words.backToOrder({ number: sheet.number }) }}
-      title={words.blindTitle}
-      under={words.under({ number: sheet.number, key: sheet.key, doses: sheet.doses })}
-    >
-      <SecondCalculation sheet={sheet} zone={zone} />
-      <StopCriteria sheet={sheet} />
-    </PhoneSheet>
+    <>
+      <PhoneSheet
+        back={{ to: paths.order(sheet.number), label: words.backToOrder({ number: sheet.number }) }}
+        title={words.blindTitle}
+        under={words.under({ number: sheet.number, key: sheet.key, doses: sheet.doses })}
+        foot={
+          mayHold ? (
+            <Button kind="hold" size="touch" onClick={() => setHoldAt(new Date().toISOString())}>
+              {words.hold}
+            </Button>
+          ) : undefined
+        }
+      >
+        <SecondCalculation sheet={sheet} zone={zone} />
+        <StopCriteria sheet={sheet} />
+      </PhoneSheet>
+      {holdAt === null ? null : (
+        <HoldDialog number={sheet.number} now={holdAt} onBack={() => setHoldAt(null)} />
+      )}
+    </>
   )
 }
 
