@@ -84,6 +84,7 @@ export const orderFormWords = defineMessages({
   working: 'Working out',
   old: 'What stands here is from before the last change.',
   notJudged: 'The order can’t be worked out and judged now.',
+  notYetJudged: 'Conditions and cautions stand here once the product is chosen.',
   notJudgedKept: 'What you typed is here and can be kept as a draft.',
   unrounded: (p: { amount: string }) => `Unrounded: ${p.amount}`,
   waterHeading: 'Connected water now',

@@ -98,6 +98,7 @@ export const orderViewWords = defineMessages({
   joined: (p: { bodies: string }) => `Connected water: ${p.bodies}.`,
   valve: (p: { code: string; state: string }) => `${p.code} ${p.state}`,
   animals: 'Animals',
+  animalsChosen: (p: { count: number }) => counted(p.count, 'record', 'records'),
   accession: 'Number',
   animal: 'Animal',
   count: 'How many',

@@ -330,3 +330,71 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     expect(await vet.getByText(/^Held by/).count()).toBe(0)
   })
 })
+
+describe('the form of an order', () => {
+  it('is filled in and kept with the keyboard alone, by a technician as a proposal', async () => {
+    const page = await signedIn('technician', desk, '/orders')
+    const keys = page.keyboard
+    /** Goes on with Tab until a control of that name has the focus. */
+    const tabTo = async (name: string) => {
+      const control = page
+        .getByLabel(name, { exact: true })
+        .or(page.getByRole('button', { name, exact: true }))
+        .or(page.getByRole('link', { name, exact: true }))
+        .or(page.getByRole('radio', { name, exact: true }))
+        .or(page.getByRole('checkbox', { name }))
+        .first()
+      await control.waitFor()
+      for (let i = 0; i < 60; i++) {
+        await keys.press('Tab')
+        if (await control.evaluate((node) => node === document.activeElement)) return
+      }
+      throw new Error(`Tab never came to ${name}`)
+    }
+    await tabTo('Propose an order')
+    await keys.press('Enter')
+    await page.getByText('A veterinarian takes up your proposal and signs it.').waitFor()
+    await tabTo('Enclosure whose water is treated')
+    await keys.type('QT-3')
+    await keys.press('ArrowDown')
+    await keys.press('Enter')
+    await page.getByRole('checkbox', { name: /Yellow tang/ }).waitFor()
+    await tabTo('A-0001 Yellow tang')
+    await keys.press('Space')
+    await tabTo('Problem treated')
+    await keys.type('Flukes seen on a scrape')
+    await tabTo('Drug product, into the water')
+    await keys.type('prazi')
+    await keys.press('ArrowDown')
+    await keys.press('Enter')
+    await tabTo('Target in the water')
+    await keys.type('2')
+    await tabTo('Target is counted')
+    await keys.type('as active')
+    await tabTo('For a time, then out')
+    await keys.press('ArrowRight')
+    await keys.press('Enter')
+    await tabTo('Balance or measure reads to')
+    await keys.type('0.01')
+    await page.locator('.dose-head').getByText('4.36').first().waitFor()
+    await tabTo('Keep as proposal')
+    await keys.press('Enter')
+    await page.waitForURL(/\/orders\/TO-\d+\/edit$/)
+    const number = /TO-\d+/.exec(page.url())?.[0] ?? ''
+    const kept = (await (await app.as('keeper')).agent.get(`/api/orders/${number}`).expect(200)).body
+    expect(kept).toMatchObject({
+      phase: 'proposed',
+      draft: {
+        problem: 'Flukes seen on a scrape',
+        target: { value: '2', unit: 'mg/L' },
+        basis: 'active',
+        timing: 'indefinite',
+        division: { value: '0.01', unit: 'g' },
+      },
+    })
+    expect(kept.draft.animalIds).toHaveLength(1)
+    // a technician is told who signs
+    const sign = page.getByRole('region', { name: 'Sign as author of this order' })
+    expect(await sign.textContent()).toContain('This is for a veterinarian')
+  })
+})

@@ -1,11 +1,13 @@
 import type { ReactNode } from 'react'
+import { useQuery } from '@tanstack/react-query'
 import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { basisNames } from '../../../shared/messages/formulary.ts'
+import { agentNames, basisNames } from '../../../shared/messages/formulary.ts'
 import { orderViewWords as words, settingNames } from '../../../shared/messages/orders-screens.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { Facts } from '../../ui/facts.tsx'
+import { formularyQuery } from '../formulary/index.ts'
 import { doseOfEntered, dosesText } from './order-parts.tsx'
 import { DoseText } from './dose-text.tsx'
 
@@ -82,9 +84,28 @@ export function SignedFacts({ content, zone }: { content: SignedBathOrder; zone:
 
 /** An order that is being written, for those who may only read it. */
 export function DraftFacts({ fields, zone }: { fields: BathOrderFields; zone: string }) {
+  const { data } = useQuery(formularyQuery)
+  const product = data?.products.find((one) => one.id === fields.productId)
   return (
     <Facts
       of={[
+        [words.drug, product ? <b key="drug">{agentNames[product.agent]}</b> : open],
+        [
+          words.product,
+          product ? (
+            <>
+              {product.productName}
+              {', '}
+              <DoseText text={doseOfEntered(product.strength)} /> {basisNames[product.strengthBasis]}
+            </>
+          ) : (
+            open
+          ),
+        ],
+        [
+          words.animals,
+          fields.animalIds.length === 0 ? open : words.animalsChosen({ count: fields.animalIds.length }),
+        ],
         [
           words.target,
           fields.target ? (

@@ -20,7 +20,7 @@ export function OrderFormFoot({
     <div className="order-foot">
       <span>
         {preview?.amount ? <DoseText text={preview.amount.text} size="strong" /> : orderViewWords.noAmount}
-        {preview ? <span className="t-note block">{cautionCount(preview.cautions)}</span> : null}
+        {preview?.amount ? <span className="t-note block">{cautionCount(preview.cautions)}</span> : null}
       </span>
       <Button
         kind="primary"

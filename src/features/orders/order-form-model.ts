@@ -165,12 +165,14 @@ export function fieldsOf(
 const { contactMinutes, doses, intervalHours, allowedVolumeDriftPercent: drift } = BathOrderFields.shape
 const shapes = { contactMinutes, doses, intervalHours, drift }
 
+/** The form shows minutes; what differs by seconds is the same to whoever reads it. */
+const minuteOf = (at: string | null) => (at === null ? null : Math.floor(Date.parse(at) / 60_000))
+
 /** Names of the fields in which two orders differ, in the order of the form. */
 export function differences(a: BathOrderFields, b: BathOrderFields): (keyof BathOrderFields)[] {
   const text = (value: unknown) => JSON.stringify(value)
   return (Object.keys(BathOrderFields.shape) as (keyof BathOrderFields)[]).filter((name) => {
-    if (name === 'startsAt')
-      return Date.parse(a.startsAt ?? '') !== Date.parse(b.startsAt ?? '') && a.startsAt !== b.startsAt
+    if (name === 'startsAt') return minuteOf(a.startsAt) !== minuteOf(b.startsAt)
     if (name === 'animalIds') return text([...a.animalIds].sort()) !== text([...b.animalIds].sort())
     return text(a[name]) !== text(b[name])
   })

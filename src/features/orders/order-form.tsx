@@ -70,6 +70,8 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
   const preview = useQuery(previewQuery(settled === 'null' ? null : (JSON.parse(settled) as typeof fields)))
   const judged = fields === null ? undefined : preview.data
   const current = settled === text && !preview.isFetching && !preview.isError
+  // without a product there is nothing to judge, which is not the same as no caution
+  const isJudged = judged !== undefined && (judged.amount !== null || judged.refusal !== null)
   const change = (changes: Partial<OrderValues>) => setValues((old) => ({ ...old, ...changes }))
   const wrong = (name: keyof OrderValues) =>
     faults.find((fault) => fault.name === name)?.says ??
@@ -199,7 +201,7 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
         ) : null}
       </Area>
       <Area ground="land" className="area-order-side">
-        {judged ? (
+        {judged && isJudged ? (
           <div className="pane stack gap-5">
             <OrderConditions conditions={judged.conditions} />
             <JudgedCautions
@@ -209,7 +211,9 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
               maySign={sign.allowed}
             />
           </div>
-        ) : null}
+        ) : (
+          <p className="pane">{words.notYetJudged}</p>
+        )}
         <div className="pane">
           <SignBlock
             shut={whyNotSign({ preview: judged, current, answers, faults: faults.length })}
