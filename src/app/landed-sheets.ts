@@ -10,5 +10,6 @@ export const landed: ReadonlySet<SheetName> = new Set<SheetName>([
   'water',
   'animals',
   'orders',
+  'pharmacy',
   'register',
 ])

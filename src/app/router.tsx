@@ -1,6 +1,7 @@
 import type { QueryClient } from '@tanstack/react-query'
-import { createBrowserRouter } from 'react-router-dom'
+import { createBrowserRouter, redirect } from 'react-router-dom'
 import type { RouteObject } from 'react-router-dom'
+import { paths } from '../lib/paths.ts'
 import { RouteError } from './error-boundary.tsx'
 import { redirectSignedIn, requireSignIn } from './require-sign-in.ts'
 
@@ -43,6 +44,9 @@ const sheetRoutes: RouteObject[] = [
   { path: 'orders/:number/edit', lazy: () => import('./routes/orders/edit-order.tsx') },
   { path: 'orders/:number', lazy: () => import('./routes/orders/order.tsx') },
   { path: 'orders/:number/sheet', lazy: () => import('./routes/orders/sheet.tsx') },
+  { path: 'pharmacy', loader: () => redirect(paths.formulary()) },
+  { path: 'pharmacy/formulary', lazy: () => import('./routes/pharmacy/formulary.tsx') },
+  { path: 'pharmacy/formulary/:id', lazy: () => import('./routes/pharmacy/dose-line.tsx') },
   { path: 'settings/own', lazy: () => import('./routes/own-settings.tsx') },
   { path: 'settings/people', lazy: () => import('./routes/people.tsx') },
   { path: 'settings/people/new', lazy: () => import('./routes/new-person.tsx') },

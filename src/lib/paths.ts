@@ -40,6 +40,7 @@ export const paths = {
 
   pharmacy: () => '/pharmacy',
   formulary: () => '/pharmacy/formulary',
+  doseLine: (id: string) => `/pharmacy/formulary/${part(id)}`,
   stock: () => '/pharmacy/stock',
   controlled: () => '/pharmacy/controlled',
 

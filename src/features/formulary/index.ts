@@ -1,2 +1,6 @@
 export { formularyKey, formularyQuery } from './queries.ts'
 export { rangeOfLine, useOfLine } from './dose-line-text.ts'
+export { DoseLines } from './dose-lines.tsx'
+export { ConfirmLine, DoseLineFacts } from './dose-line-view.tsx'
+export { matchingLines, matchingProducts } from './formulary-model.ts'
+export { Products } from './products.tsx'
