@@ -345,7 +345,7 @@ export const holdOrder = contract({
     reason: z.string().trim().max(2000).optional().describe('Why, where there is time to say so'),
   }),
   reply: { 201: Order },
-  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  problems: ['not-found', 'id-already-used'],
   idempotent: 'by-record-id',
 })
 

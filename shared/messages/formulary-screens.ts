@@ -29,6 +29,7 @@ export const formularyWords = defineMessages({
   readLine: (p: { drug: string; use: string }) => `${p.drug}, ${p.use}`,
 
   lineTitle: 'Dose line',
+  lineUse: 'Use',
   basis: 'Counted',
   mark: 'Mark',
   citation: 'Source',
@@ -50,6 +51,7 @@ export const formularyWords = defineMessages({
   strength: 'Strength',
   lots: 'Lots',
   noProducts: 'No product here',
+  noneOfDrug: 'No product of this drug is entered.',
   notInUse: 'not in use',
   noLots: 'no lot entered',
   lot: (p: { lot: string; expires: string }) => `${p.lot}, use by ${p.expires}`,

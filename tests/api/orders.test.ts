@@ -317,6 +317,21 @@ describe('an order for a bath', () => {
     expect(lifted.body.phase).toBe('not-started')
     expect(lifted.body.events).toHaveLength(2)
     expect((await lift(vet.agent)).body.code).toBe('not-held')
+    // a phone whose clock goes half an hour ahead holds all the same, by now; the same request again changes nothing
+    api.clock.set(new Date(api.clock.now().getTime() + 60_000))
+    const fast = {
+      id: api.nextId(),
+      happenedAt: new Date(api.clock.now().getTime() + 1_800_000).toISOString(),
+    }
+    const url = `/api/orders/${draft.number}/holds`
+    await keeper.agent.post(url).send(fast).expect(201)
+    api.clock.set(new Date(api.clock.now().getTime() + 1000))
+    const again = await keeper.agent.post(url).send(fast).expect(201)
+    expect(again.body).toMatchObject({
+      phase: 'held',
+      events: [{ kind: 'held', happenedAt: '2026-12-01T18:21:00.000Z' }, {}, {}],
+    })
+    api.clock.set(new Date('2026-12-01T18:20:00Z'))
   })
 
   it('prints with licence block, working, conditions and cautions, and says so when the record was changed', async () => {

@@ -1,6 +1,6 @@
 import type { Browser, Page } from 'playwright-core'
 import pg from 'pg'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { installation } from '../../server/platform/http/request-context.ts'
 import { aTaxon, anAnimal } from '../builders/a-collection.ts'
 import {
@@ -153,6 +153,9 @@ async function expectSound(page: Page, where: string): Promise<void> {
   }))
   expect(scrolls, `${where} at ${String(width)} px`).toBeLessThanOrEqual(width)
 }
+
+// signatures and readings are judged by the server's time, which the tests move along with the browser's
+beforeEach(() => app.clock.set(new Date()))
 
 describe.each([desk, phone])('orders at $width px', (size) => {
   it('are listed, searched and filtered by the address', async () => {

@@ -7,7 +7,6 @@ import { orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
-import { timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
@@ -298,13 +297,17 @@ export function createOrdersService(parts: OrdersParts) {
       })
     },
 
-    /** Holds an order at once. Never refused for its state: whoever saw something may stop. */
+    /**
+     * Holds an order at once. Never refused for its state, nor for a device's clock that goes ahead: whoever saw something
+     * may stop, and then it was stopped by now.
+     */
     async holdOrder(
       context: RequestContext,
       number: string,
       given: { id: string; happenedAt: string; reason?: string },
     ): Promise<void> {
-      const happenedAt = timeNotAhead(given.happenedAt, parts.clock.now())
+      const said = Date.parse(given.happenedAt)
+      const happenedAt = new Date(Math.min(said, parts.clock.now().getTime()))
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await noteEvent(tx, order, 'held', { id: given.id, happenedAt, reason: given.reason ?? null })

@@ -24,7 +24,7 @@ export function DoseLineFacts({ line, zone }: { line: DoseLine; zone: string }) 
     <Facts
       of={[
         [words.drug, <b key="drug">{agentNames[line.agent]}</b>],
-        [words.use, useOfLine(line)],
+        [words.lineUse, useOfLine(line)],
         [
           words.range,
           <b key="range" data-quantity="dose">

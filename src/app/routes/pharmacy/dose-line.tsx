@@ -51,7 +51,11 @@ export function Component() {
             {line ? (
               <section className="stack">
                 <h2 className="t-head">{words.productsOfDrug}</h2>
-                <Products products={products.filter((one) => one.agent === line.agent)} zone={zone} />
+                {products.some((one) => one.agent === line.agent) ? (
+                  <Products products={products.filter((one) => one.agent === line.agent)} zone={zone} />
+                ) : (
+                  <p className="t-2">{words.noneOfDrug}</p>
+                )}
               </section>
             ) : null}
           </Area>
