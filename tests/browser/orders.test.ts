@@ -334,45 +334,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
   })
 })
 
-describe.each([desk, phone])('the formulary at $width px', (size) => {
-  it('shows each range with its source and mark, and who confirmed it; a lot can be noted', async () => {
-    const page = await signedIn('veterinarian', size, '/pharmacy/formulary')
-    await page.getByRole('heading', { name: 'Formulary' }).waitFor()
-    await expectSound(page, 'the formulary')
-    await picture(page, `formulary-${String(size.width)}`)
-    if (size === phone) await page.getByText('Filters', { exact: true }).click()
-    await page.getByLabel('Drug', { exact: true }).selectOption('formalin')
-    await page.waitForURL(/drug=formalin/)
-    const line = size === desk ? /external parasites, bath/ : /left in the water/
-    const row = page.getByRole('row').filter({ hasText: line }).first()
-    await page.getByLabel('Drug', { exact: true }).selectOption(size === desk ? 'formalin' : 'praziquantel')
-    await row.waitFor()
-    await row.getByRole('link').click()
-    await page.getByText(/^(V|V2|C|M|P): /).waitFor()
-    await page.getByRole('button', { name: 'Confirm for this facility' }).click()
-    await page.getByLabel('How it was checked').fill('Read in the edition of 2015 beside the label')
-    await page.getByRole('dialog').getByRole('button', { name: 'Confirm for this facility' }).click()
-    await page.getByText(/Test veterinarian, \d/).waitFor()
-    expect(await page.getByText('Confirmed here').isVisible()).toBe(true)
-    await expectSound(page, 'a dose line')
-    await picture(page, `dose-line-${String(size.width)}`)
-
-    await page.goto(`${app.url}/pharmacy/formulary?q=copper`)
-    await page
-      .getByRole('button', { name: /Note what happened to lot/ })
-      .first()
-      .click()
-    await page.getByRole('button', { name: 'Note it' }).click()
-    await page.getByText('Choose what happened.').waitFor()
-    await page.getByLabel('What happened', { exact: true }).selectOption('looked-at')
-    await page.getByRole('button', { name: 'Note it' }).click()
-    await page
-      .getByText(/looked at and found clear/)
-      .first()
-      .waitFor()
-  })
-})
-
 describe('the form of an order', () => {
   it('is filled in and kept with the keyboard alone, by a technician as a proposal', async () => {
     const page = await signedIn('technician', desk, '/orders')
