@@ -197,7 +197,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     await page.goto(`${app.url}/orders/${numbers.signed}`)
     await page.getByRole('link', { name: 'Bath sheet of dose 1' }).waitFor()
     expect(await page.getByText('Dose 3').isVisible()).toBe(true)
-    await picture(page, `order-doses-${String(size.width)}`)
   })
 
   it('say loudly that a record was changed after its signature', async () => {
@@ -215,7 +214,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     await page.getByRole('option', { name: /QT-4/ }).first().click()
     await page.getByRole('checkbox', { name: /Yellow tang/ }).check()
     await expectSound(page, 'an empty order')
-    await picture(page, `order-new-${String(size.width)}`)
     await page.getByLabel('Problem treated').fill('White spot, seen on gill mount')
     await page.getByRole('combobox', { name: 'Drug product, into the water' }).fill('copper')
     await page.getByRole('option', { name: /copper sulfate/ }).click()
@@ -241,7 +239,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     // 0.15 mg/L × 2,181.4 L ÷ 25.45 % ÷ 99 % = 1.299 g, by hand
     await page.locator('.dose-head').getByText('1.299').first().waitFor()
     const signing = page.getByRole('region', { name: 'Sign as author of this order' })
-    await picture(page, `order-form-${String(size.width)}`)
     await signing.getByText('One stop is open: remove its cause, or give a reason.').waitFor()
     await expectSound(page, 'an order with its cautions')
     await page.getByLabel('Why it is overridden').fill('the shrimp moves to QT-5 before the first gram')
@@ -276,7 +273,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     expect(await sign.getAttribute('aria-disabled')).toBe('true')
     expect(await page.getByLabel('Your password').count()).toBe(0)
     await expectSound(page, 'an order that cannot be signed')
-    await picture(page, `order-vet2-${String(size.width)}`)
   })
 
   it('holds both texts when two people wrote one draft, and asks before unsaved text is left', async () => {
