@@ -3,6 +3,7 @@ import type { KeyboardEvent, Ref } from 'react'
 import { ChevronDown } from 'lucide-react'
 import { partWords } from '../../shared/messages/parts.ts'
 import { Button } from './button.tsx'
+import { afterPress } from './after-press.ts'
 import { classNames } from './class-names.ts'
 import { Field } from './field.tsx'
 import type { FieldProps } from './field.tsx'
@@ -70,7 +71,7 @@ export function QuantityField(props: QuantityFieldProps) {
               value={quantity.value}
               onChange={(event) => state.type(event.target.value)}
               onBlur={() => {
-                void state.settle()
+                afterPress(() => void state.settle())
                 onBlur?.()
               }}
               onKeyDown={onKeyDown}

@@ -53,6 +53,7 @@ export function useQuantityField({ quantity, onChange, allowNegative, ...given }
 
   const settle = async () => {
     const typed = quantity.value
+    if (latest.current !== typed) return
     const read = readQuantityText(typed)
     if (read.kind === 'empty') return setFault(undefined)
     if (read.kind === 'refused') return setFault(sayNumberRefusal(read.refusal))
