@@ -57,7 +57,7 @@ export function PassageCase({
           <OldLegWords key={old.breakX} old={old} first={i === 0} scale={scale} />
         ))}
         {labels.map((label) => (
-          <g key={`${label.x} ${label.day}`}>
+          <g key={`${label.x} ${label.dayY} ${label.day}`}>
             <text x={label.x} y={label.dayY} className={classNames('s-11 s-b', anchors[label.anchor])}>
               {label.day}
             </text>
