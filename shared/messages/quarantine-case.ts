@@ -11,6 +11,7 @@ export const caseWords = defineMessages({
   manyAccessions: (p: { first: string; last: string; count: number }) =>
     `${p.first} to ${p.last} (${p.count} numbers)`,
   inNoEnclosure: 'In no enclosure now',
+  caseEnded: 'No longer held under this case',
   protocolName: (p: { code: string; version: number; days: number }) =>
     `${p.code} version ${p.version}, ${days(p.days)}`,
   protocolUnconfirmed: 'No licensed veterinarian has confirmed this protocol yet.',

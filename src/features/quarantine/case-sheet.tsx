@@ -308,7 +308,7 @@ function sourceText(detail: CaseDetail): string {
   return words.source({
     animals: animalsText(detail.animals),
     accessions,
-    places: detail.enclosures.join(', ') || words.inNoEnclosure,
+    places: detail.enclosures.join(', ') || (hasEnded(detail) ? words.caseEnded : words.inNoEnclosure),
     kind: quarantineKindWords[detail.quarantineKind],
     protocol: words.protocolName({ code, version, days: detail.requiredDays }),
   })
