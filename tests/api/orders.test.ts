@@ -331,6 +331,13 @@ describe('an order for a bath', () => {
       phase: 'held',
       events: [{ kind: 'held', happenedAt: '2026-12-01T18:21:00.000Z' }, {}, {}],
     })
+    // and one that comes in after the lift holds, though it was pressed before it: nobody lifted that
+    api.clock.set(new Date(api.clock.now().getTime() + 60_000))
+    expect((await lift(vet.agent)).body.phase).toBe('not-started')
+    api.clock.set(new Date(api.clock.now().getTime() + 60_000))
+    const late = { id: api.nextId(), happenedAt: '2026-12-01T18:00:00Z' }
+    expect((await keeper.agent.post(url).send(late).expect(201)).body.phase).toBe('held')
+    expect((await lift(keeper.agent)).status).toBe(403)
     api.clock.set(new Date('2026-12-01T18:20:00Z'))
   })
 

@@ -1,5 +1,5 @@
 import type { Browser, Page } from 'playwright-core'
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aProduct } from '../builders/an-order.ts'
 import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
@@ -12,7 +12,6 @@ let app: ServedApp
 
 beforeAll(async () => {
   app = await startServedApp()
-  app.clock.set(new Date())
   await app.composition.formulary.service.loadDefaults()
   await app.as('veterinarian')
   await aProduct(app, {})
@@ -25,8 +24,6 @@ beforeAll(async () => {
   })
   browser = await launchChromium()
 }, 180_000)
-// the page says "now" by the browser's clock, so the server has to live at the same time
-beforeEach(() => app.clock.set(new Date()))
 afterAll(async () => {
   await browser.close()
   await app.stop()

@@ -37,7 +37,7 @@ const columns = `
   coalesce(v.agent, f.agent) AS agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
   v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
-             ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1), false) AS held,
+             ORDER BY e.recorded_at DESC, e.happened_at DESC LIMIT 1), false) AS held,
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
   coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
              WHERE x.order_id = o.id), '{}') AS done_keys,
@@ -100,7 +100,7 @@ export function readEvents(db: Db, orderId: string): Promise<EventReadRow[]> {
   return db.query(
     `SELECT e.id, e.kind, e.reason, e.happened_at, p.printed_name AS by_name
        FROM order_events e LEFT JOIN people p ON p.id = e.recorded_by
-      WHERE e.order_id = $1 ORDER BY e.happened_at DESC, e.recorded_at DESC`,
+      WHERE e.order_id = $1 ORDER BY e.recorded_at DESC, e.happened_at DESC`,
     [orderId],
   )
 }

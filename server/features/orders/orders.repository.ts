@@ -50,11 +50,14 @@ export function insertEvent(tx: Tx, row: OrderEventRow): Promise<{ created: bool
   return insertOnce(tx, OrderEventRow, row, ['orderId', 'kind', 'reason'])
 }
 
-/** Every event of an order, the oldest first. */
+/**
+ * Every event of an order, in the order of entry: a hold that comes in late from a phone without a signal, or whose clock
+ * is behind, holds from then on, though a lift has a later time.
+ */
 export function eventsOf(tx: Tx, orderId: string): Promise<OrderEventRow[]> {
   return tx.manager.find(OrderEventRow, {
     where: { orderId },
-    order: { happenedAt: 'ASC', recordedAt: 'ASC' },
+    order: { recordedAt: 'ASC', happenedAt: 'ASC' },
   })
 }
 
