@@ -267,7 +267,7 @@ export const stopBath = contract({
     rescue: z.string().trim().max(1000).optional().describe('Flush, air, clean water'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  problems: ['not-found', 'id-already-used'],
 })
 
 export const listDueDoses = contract({

@@ -255,7 +255,8 @@ describe('a dose', () => {
     const stop = {
       id: api.nextId(),
       cause: 'stopped',
-      happenedAt: '2026-12-01T18:22:00Z',
+      // of a phone whose clock goes half an hour ahead: stopping is not refused
+      happenedAt: '2026-12-01T18:50:00Z',
       seen: 'two on their side',
       rescue: 'flushed',
     }
@@ -264,6 +265,7 @@ describe('a dose', () => {
       cause: 'stopped',
       seen: 'two on their side',
       by: 'Test keeper',
+      at: api.clock.now().toISOString(),
     })
     await keeper.agent.post(`/api/doses/${id}/stop`).send(stop).expect(201)
     const registrar = await api.as('registrar')

@@ -15,7 +15,8 @@ export function findDose(tx: Tx, id: string): Promise<DoseRow | null> {
 }
 
 export function insertStop(tx: Tx, row: BathStopRow): Promise<{ created: boolean }> {
-  return insertOnce(tx, BathStopRow, row, ['doseId', 'cause', 'happenedAt'])
+  // the time is not compared: of a device whose clock goes ahead it is the server's, and another on every attempt
+  return insertOnce(tx, BathStopRow, row, ['doseId', 'cause'])
 }
 
 /** The newest calculation of a part for one dose; null when there is none. */

@@ -12,7 +12,7 @@ import { sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
-import { timeNotAhead } from '../../platform/http/check-time.ts'
+import { timeByNow, timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -345,7 +345,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       doseId: string,
       given: BodyOf<typeof contracts.stopBath>,
     ): Promise<void> {
-      const happenedAt = timeNotAhead(given.happenedAt, parts.clock.now())
+      const happenedAt = timeByNow(given.happenedAt, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const dose = await repository.findDose(tx, doseId)
         const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))

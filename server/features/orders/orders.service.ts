@@ -7,6 +7,7 @@ import { orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import { timeByNow } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
@@ -306,8 +307,7 @@ export function createOrdersService(parts: OrdersParts) {
       number: string,
       given: { id: string; happenedAt: string; reason?: string },
     ): Promise<void> {
-      const said = Date.parse(given.happenedAt)
-      const happenedAt = new Date(Math.min(said, parts.clock.now().getTime()))
+      const happenedAt = timeByNow(given.happenedAt, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await noteEvent(tx, order, 'held', { id: given.id, happenedAt, reason: given.reason ?? null })

@@ -5,6 +5,13 @@ import { Problem } from './problem.ts'
 /** The instant at which everything recorded so far has happened, also by a clock that goes ahead: what "now" is read at. */
 export const latestRecorded = (now: Date): Date => new Date(now.getTime() + clockSkewMs)
 
+/**
+ * When somebody stopped something: as they say, or now where their clock goes ahead. Stopping is never refused, and what
+ * is stopped was stopped by now.
+ */
+export const timeByNow = (given: string, now: Date): Date =>
+  new Date(Math.min(Date.parse(given), now.getTime()))
+
 /** The time a person gave as a Date; refused when it lies more than 5 min ahead of the server's clock. */
 export function timeNotAhead(given: string, now: Date, pointer = '/happenedAt'): Date {
   const at = new Date(given)
