@@ -3,6 +3,7 @@ import { counted, defineMessages } from './define-messages.ts'
 /** Words of the formulary: dose lines, products and their lots. */
 export const formularyWords = defineMessages({
   title: 'Formulary',
+  sheet: 'Pharmacy: formulary',
   place: 'Pharmacy',
   source:
     'Baths: what range is usual, where the figure comes from, and who confirmed it here. Nothing is filled in from it.',

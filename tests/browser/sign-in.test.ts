@@ -154,6 +154,9 @@ describe('the frame', () => {
     await page.getByRole('button', { name: 'Test veterinarian, menu' }).click()
     expect(await page.evaluate(() => document.documentElement.dataset.theme)).toBe('night')
     await expectAccessible(page, 'own settings, night watch')
+    // the way back leads past a sheet that was seen while signed in
+    await page.goto(`${app.url}/animals`)
+    await page.getByRole('button', { name: 'Test veterinarian, menu' }).click()
     await page.getByRole('menuitem', { name: 'Sign out' }).click()
     await page.waitForURL(/\/sign-in/)
     await page.goBack()

@@ -22,7 +22,7 @@ const states = ['default', 'confirmed', 'proposed'] as const
 
 /** Dose lines with their sources, and products with their lots. */
 export function Component() {
-  useSheetTitle(words.title)
+  useSheetTitle(words.sheet)
   const list = useListState()
   const { zone } = useMe().facility
   const query = useQuery(formularyQuery)
