@@ -58,6 +58,8 @@ export default defineConfig({
   // Fonts stay files: the content security policy takes none from data addresses
   build: { outDir: 'dist/client', manifest: true, assetsInlineLimit: 0 },
   test: {
+    // a browser waits more than it works: two files at a time also on two cores
+    maxWorkers: 2,
     projects: [
       {
         extends: true,
