@@ -91,7 +91,7 @@ export function layPassage(view: PassageView, scale: DayScale, y: number, size: 
     shipX: view.held || ringOnNow || harbourOnNow || !running ? null : nowX + (crowded ? 17 : 8),
     heldX: view.held ? nowX + 12 : null,
     harbourX: rawHarbour,
-    texts: size === 'case' ? [] : layTexts(view, scale, y, marks, oldLegs, size),
+    texts: size === 'case' ? [] : layTexts(view, scale, y, { marks, oldLegs, pauses }, size),
   }
 }
 
@@ -135,8 +135,7 @@ function layTexts(
   view: PassageView,
   scale: DayScale,
   y: number,
-  marks: readonly CourseMark[],
-  oldLegs: readonly OldLeg[],
+  { marks, oldLegs, pauses }: Pick<CourseGeometry, 'marks' | 'oldLegs' | 'pauses'>,
   size: PassageSize,
 ): CourseText[] {
   const texts: CourseText[] = []
@@ -146,10 +145,22 @@ function layTexts(
     ? { x1: harbour - 110, x2: harbour + 10, y1: y - 20, y2: y - 6 }
     : { x1: harbour + 16, x2: harbour + 110, y1: y - 14, y2: y + 16 }
   const rise = size === 'close' ? 9 : 11
+  // the words over a pause, and the marks themselves, have their place already
+  const taken: Box[] = [
+    ...(size === 'close' ? [] : pauses).map(({ x1, x2 }) => around((x1 + x2) / 2, y - 12, 36, 10)),
+    ...marks.filter((mark) => mark.old).map((mark) => around(mark.x, mark.y, 6, 5)),
+    ...oldLegs.slice(1).map((old) => around(old.breakX, old.y, 4, 6)),
+  ]
   const place = (text: CourseText) => {
     const box = textBox(text)
     const fits = box.x1 >= 0 && box.x2 <= scale.width
-    if (fits && !overlap(box, land) && texts.every((other) => !overlap(box, textBox(other)))) texts.push(text)
+    if (
+      fits &&
+      !overlap(box, land) &&
+      taken.every((other) => !overlap(box, other)) &&
+      texts.every((other) => !overlap(box, textBox(other)))
+    )
+      texts.push(text)
   }
   for (const mark of marks) {
     const late = mark.fixes[0]?.late
@@ -196,6 +207,13 @@ interface Box {
   y1: number
   y2: number
 }
+
+const around = (x: number, y: number, half: number, rise: number): Box => ({
+  x1: x - half,
+  x2: x + half,
+  y1: y - rise,
+  y2: y + rise,
+})
 
 /** About how much room a text takes in the drawing. */
 export function textBox({ x, y, text, anchor }: Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'>): Box {
