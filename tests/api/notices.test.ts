@@ -83,7 +83,7 @@ describe('an urgent call', () => {
     expect(letter?.message).toContain(`Subject: URGENT: ${one.enclosure.code}`)
     const unfolded = letter?.message.replaceAll('=\r\n', '')
     expect(unfolded).toContain('Two lie on the floor, one tail slack.')
-    expect(unfolded).toContain(`https://pratique.example/notices/${noticeId}`)
+    expect(unfolded).toContain(`https://pratique.example/urgent/${noticeId}`)
 
     const called = { id: api.nextId(), whom: 'Duty desk', happenedAt: '2026-12-01T18:15:00Z' }
     await agent.post(`/api/notices/${noticeId}/telephoned`).send(called).expect(201)

@@ -124,16 +124,21 @@ describe('sign-in', () => {
     await agent.get('/api/settings').expect(200)
   })
 
-  it('answers malformed JSON and unknown addresses as problems', async () => {
-    const admin = await api.as('administrator')
-    const broken = await admin.agent
-      .post('/api/people')
-      .set('Content-Type', 'application/json')
-      .send('{broken')
-    expect(broken.status).toBe(400)
-    expect(broken.body.code).toBe('malformed-json')
-    expect((await admin.agent.get('/api/nowhere').expect(404)).body.code).toBe('unknown-route')
-    await admin.agent.get('/api/health').expect(200)
-    await admin.agent.get('/api/ready').expect(200)
-  })
+  it.each(['a\u0000b', 'half \ud800', 'bell \u0007'])(
+    'refuses text that nothing could show again: %j',
+    async (odd) => {
+      const keeper = await api.as('keeper')
+      const body = JSON.stringify({ id: api.nextId(), words: odd })
+      const note = await keeper.agent
+        .post('/api/handover-notes')
+        .set('Content-Type', 'application/json')
+        .send(body)
+      expect(note.status).toBe(422)
+      expect(note.body.errors).toEqual([
+        { pointer: '/words', detail: expect.stringMatching(/cannot be written/) },
+      ])
+      const found = await keeper.agent.get('/api/animals?q=%00')
+      expect(found.status).toBe(422)
+    },
+  )
 })

@@ -48,7 +48,7 @@ export function createNoticesService(parts: {
           words: notice.words,
           by: notice.recorded_by_name ?? '',
           at,
-          address: `${parts.publicUrl}/notices/${notice.id}`,
+          address: `${parts.publicUrl}/urgent/${notice.id}`,
         }),
       })
       return null

@@ -14,6 +14,7 @@ import type { RequestContext } from './request-context.ts'
 import { requestIdOf } from './request-id.ts'
 import type { FileReply, Route } from './route.ts'
 import { fieldProblems } from './to-problem.ts'
+import { findUnwritableText } from './unwritable-text.ts'
 
 const readJson = express.json({ limit: '1mb', strict: true })
 
@@ -41,6 +42,8 @@ function guard(of: Contract, tools: RouteTools): RequestHandler {
 
 function parsePart(schema: z.ZodType | undefined, value: unknown, root: string) {
   if (!schema) return { value: undefined, errors: [] }
+  const unwritable = findUnwritableText(value, root)
+  if (unwritable.length > 0) return { value: undefined, errors: unwritable }
   const parsed = schema.safeParse(value)
   return parsed.success
     ? { value: parsed.data, errors: [] }
