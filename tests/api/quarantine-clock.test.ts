@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aCase, aFish } from '../builders/a-case.ts'
 import { aGroup, aTaxon, anAnimal } from '../builders/a-collection.ts'
+import { aParty, anAcquisition } from '../builders/a-register.ts'
 import { anEnclosure, aValve } from '../builders/a-water.ts'
 import { newKey, password, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
@@ -48,6 +49,20 @@ describe('the clock of a case', () => {
       .send({ reason: 'It was another tank' })
       .expect(200)
     expect((await agent.get(one.url)).body).toMatchObject({ day0On: '2026-11-10', legs: [{ endedOn: null }] })
+  })
+
+  it('restarts when animals are accessioned into a group of its batch', async () => {
+    const one = await aCase(api, { at: '2026-11-10T14:00:00Z' })
+    const counterpartyId = await aParty(api, 'Ledder Bay Marsh Trust')
+    await anAcquisition(api, {
+      kind: 'loan-in',
+      on: '2026-11-25',
+      counterpartyId,
+      lines: [{ record: 'existing', id: api.nextId(), animalId: one.animal.id, count: 4 }],
+    })
+    const { agent } = await api.as('veterinarian')
+    const { body } = await agent.get(one.url).expect(200)
+    expect(body).toMatchObject({ day0On: '2026-11-25', dayNumber: 6 })
   })
 
   it('restarts over an open valve, and not over a shut one', async () => {

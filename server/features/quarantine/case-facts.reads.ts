@@ -165,6 +165,7 @@ export interface EntryReadRow {
   quarantine_kind: QuarantineKind
   common_name: string
   animal_count: number
+  joins_group: boolean
 }
 
 /**
@@ -179,13 +180,15 @@ export function readEntries(db: Db, since: Date): Promise<EntryReadRow[]> {
                        WHERE s.animal_id = a.split_from_id AND s.during @> m.happened_at LIMIT 1)) AS from_enclosure_id,
             m.happened_at, t.quarantine_kind, t.common_name,
             greatest(1, (SELECT coalesce(sum(e.delta), 0)::int FROM live_count_entries e
-                          WHERE e.animal_id = m.animal_id AND e.happened_at <= m.happened_at)) AS animal_count
+                          WHERE e.animal_id = m.animal_id AND e.happened_at <= m.happened_at)) AS animal_count,
+            false AS joins_group
        FROM live_moves m
        JOIN animals a ON a.id = m.animal_id
        JOIN taxa t ON t.id = a.taxon_id
       WHERE m.to_enclosure_id IS NOT NULL AND m.happened_at >= $1
      UNION ALL
-     SELECT e.id, e.animal_id, s.enclosure_id, NULL, e.happened_at, t.quarantine_kind, t.common_name, e.delta
+     SELECT e.id, e.animal_id, s.enclosure_id, NULL, e.happened_at, t.quarantine_kind, t.common_name, e.delta,
+            true
        FROM live_count_entries e
        JOIN stays s ON s.animal_id = e.animal_id AND s.during @> e.happened_at AND lower(s.during) < e.happened_at
        JOIN animals a ON a.id = e.animal_id

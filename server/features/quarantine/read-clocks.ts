@@ -198,6 +198,7 @@ async function readAdditions(
         fromEnclosureId: row.from_enclosure_id,
         at: row.happened_at.toISOString(),
         quarantineKind: row.quarantine_kind,
+        joinsGroup: row.joins_group,
         animalName: nameInSentence(row.common_name),
         animalCount: row.animal_count,
       })),

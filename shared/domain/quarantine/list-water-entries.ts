@@ -28,6 +28,8 @@ export interface PlaceEntry {
   /** Common name in lower case, for the sentence. */
   animalName: string
   animalCount: number
+  /** Animals that were taken into a group which was there already; `animalId` is the group. */
+  joinsGroup?: boolean
 }
 
 /** Where and when the batch of a case was; `until` is exclusive. */
@@ -50,8 +52,8 @@ export interface CaseForEntries {
 
 /**
  * Every addition to a closed case that the ledger of places shows (rule K06 a, b): animals that are not of its batch and
- * came into the same water, into water connected to it at that instant, or into the same room. Nobody has to report it,
- * a move entered late counts from when it happened, and one struck out has never been.
+ * came into the same water, into water connected to it at that instant, or into the same room. Animals taken into a group
+ * of the batch are an addition like any other. Nobody has to report it, a move entered late counts from when it happened, and one struck out has never been.
  *
  * Animals that were in that water before, and only changed their enclosure, are no addition; nor is a group parted where
  * it stands. Whether an addition to the room restarts the days is the clock's to say.
@@ -91,7 +93,8 @@ export function listWaterEntries(
     const batch = new Set(one.stays.map(({ animalId }) => animalId))
     for (const entry of entries) {
       const ms = instantToMs(entry.at)
-      if (ms <= closedMs || ms >= endMs || batch.has(entry.animalId)) continue
+      const isOfBatch = batch.has(entry.animalId) && entry.joinsGroup !== true
+      if (ms <= closedMs || ms >= endMs || isOfBatch) continue
       const held = placesAt(one.stays, ms)
       if (held.size === 0) continue
       const water = sharing(entry.enclosureId, entry.at)

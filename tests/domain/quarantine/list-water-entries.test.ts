@@ -62,6 +62,7 @@ describe('additions that the ledger of places shows', () => {
     ['elsewhere', { enclosureId: 'D' }, []],
     ['before the batch was closed', { at: '2026-05-02T11:00:00Z' }, []],
     ['of the batch itself', { animalId: 'f1' }, []],
+    ['into a group of the batch', { animalId: 'f1', joinsGroup: true }, ['same-water']],
     ['from one tank of that water to another', { fromEnclosureId: 'B' }, []],
     ['from another tank of the room into that water', { fromEnclosureId: 'C' }, ['same-water']],
     ['from one tank of the room to another', { enclosureId: 'C', fromEnclosureId: 'B' }, []],
