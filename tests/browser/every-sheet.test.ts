@@ -48,7 +48,8 @@ async function unsafeWritingOn(page: Page): Promise<string[]> {
     )
   return [
     ...read.quantities.flatMap(({ kind, text }) => found(text, kind as Writing)),
-    ...found(read.prose, 'prose'),
+    // the number of a publication is no quantity
+    ...found(read.prose.replace(/\b10\.\d{4,9}\/\S+/g, 'doi'), 'prose'),
   ]
 }
 
