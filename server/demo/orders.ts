@@ -1,5 +1,6 @@
 import type { BathOrderFields } from '../../shared/contracts/orders.contract.ts'
 import type { Composition } from '../composition.ts'
+import { saidCautions } from '../features/orders/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
 import type { DemoActors, DemoPerson } from './people.ts'
 import { demoPassword } from './people.ts'
@@ -204,16 +205,17 @@ export async function seedOrders(
   /** Signs what was written, with every warning read and every stop that fires overridden for the record. */
   async function sign(number: string, fields: BathOrderFields): Promise<void> {
     const found = await orders.judge(fields, clock.now(), {})
-    const cautions = found?.judgement?.answer.cautions ?? []
-    const rulesOf = (level: string) => [
-      ...new Set(cautions.filter((caution) => caution.level === level).map((caution) => caution.ruleId)),
-    ]
+    const cautions = found ? saidCautions(found) : []
+    const named = (level: string) =>
+      cautions
+        .filter((caution) => caution.level === level)
+        .map(({ ruleId, code, text }) => ({ ruleId, code, text }))
     await orders.service.signOrder(as('vet'), number, {
       password: demoPassword,
       expectedVersion: 1,
-      read: rulesOf('warning'),
-      overrides: rulesOf('stop').map((ruleId) => ({
-        ruleId,
+      read: named('warning'),
+      overrides: named('stop').map((stop) => ({
+        ...stop,
         reason: 'Looked at in the water; the animals are watched through the whole bath',
       })),
     })

@@ -121,7 +121,19 @@ export const BathSheet = z.object({
     .describe('Working by the water as it is now'),
   driftPercent: z.number().nullable().describe('How far the volume has moved since the signature, percent'),
   driftWithin: z.boolean().describe('Inside what the order allows'),
-  cautions: z.array(Caution).describe('What stops or warns now'),
+  cautions: z
+    .array(
+      Caution.extend({
+        overridden: z
+          .object({
+            by: z.string().describe('The veterinarian who signed the override'),
+            reason: z.string().describe('Why'),
+          })
+          .nullable()
+          .describe('Of a stop that was overridden at the signature on the same facts; null: it is open'),
+      }),
+    )
+    .describe('What stops or warns now'),
   steps: z
     .array(
       z.object({

@@ -267,7 +267,7 @@ export const previewOrder = contract({
   summary: 'Work out an order and judge it, without keeping anything',
   body: BathOrderFields,
   reply: { 200: OrderPreview },
-  problems: ['not-found'],
+  problems: ['not-found', 'dose-line-not-usable'],
   idempotent: 'nothing-kept',
 })
 
@@ -279,7 +279,7 @@ export const draftOrder = contract({
   summary: 'Keep a new draft; a technician’s is a proposal',
   body: z.strictObject({ id: RecordId, fields: BathOrderFields }),
   reply: { 201: Order },
-  problems: ['not-found', 'id-already-used'],
+  problems: ['not-found', 'id-already-used', 'dose-line-not-usable'],
   idempotent: 'by-record-id',
 })
 
@@ -292,8 +292,16 @@ export const reviseDraft = contract({
   params: orderParams,
   body: z.strictObject({ expectedVersion: Version, fields: BathOrderFields }),
   reply: { 200: Order },
-  problems: ['not-found', 'stale-version', 'order-ended'],
+  problems: ['not-found', 'stale-version', 'order-ended', 'dose-line-not-usable'],
 })
+
+/** A caution as it was read: an answer counts for this one alone, in these words. */
+export const AnsweredCaution = z.strictObject({
+  ruleId: z.string().max(20).describe('Rule that fired'),
+  code: z.string().max(80).describe('What it found'),
+  text: z.string().max(4000).describe('The sentences as they were read'),
+})
+export type AnsweredCaution = z.infer<typeof AnsweredCaution>
 
 export const signOrder = contract({
   id: 'signOrder',
@@ -305,14 +313,9 @@ export const signOrder = contract({
   body: z.strictObject({
     password: z.string().min(1).max(200).describe('The signer’s password'),
     expectedVersion: Version,
-    read: z.array(z.string().max(20)).max(60).describe('Rules whose warnings the signer has read'),
+    read: z.array(AnsweredCaution).max(60).describe('Warnings that the signer has read'),
     overrides: z
-      .array(
-        z.strictObject({
-          ruleId: z.string().max(20).describe('Rule that is overridden'),
-          reason: Reason,
-        }),
-      )
+      .array(AnsweredCaution.extend({ reason: Reason }))
       .max(30)
       .describe('Stops that are overridden, each with its reason'),
   }),
@@ -324,7 +327,9 @@ export const signOrder = contract({
     'password-wrong',
     'sign-in-locked',
     'order-incomplete',
+    'dose-line-not-usable',
     'caution-stops',
+    'caution-not-fired',
     'cautions-unread',
     'working-disagrees',
     'nothing-to-sign',

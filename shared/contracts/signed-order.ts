@@ -9,6 +9,9 @@ import {
 } from './orders.contract.ts'
 import { EnteredQuantity } from './primitives.ts'
 
+/** Orders signed earlier name the rule alone. */
+const signedAnswer = { ruleId: z.string(), code: z.string().optional(), text: z.string().optional() }
+
 /**
  * What a signature under an order for a bath covers, as far as screens read it. A text that was changed after it was
  * signed may no longer fit: parse it, and say so where it does not.
@@ -43,8 +46,8 @@ export const SignedBathOrder = z.object({
   cautions: z.array(SaidCaution).describe('Cautions at signing'),
   conditions: z.array(SaidCondition).describe('What has to be true before each dose'),
   overrides: z
-    .array(z.object({ ruleId: z.string(), reason: z.string() }))
+    .array(z.object({ ...signedAnswer, reason: z.string() }))
     .describe('Stops that were overridden, with their reasons'),
-  read: z.array(z.string()).describe('Rules whose warnings were read'),
+  read: z.array(z.union([z.string(), z.object(signedAnswer)])).describe('Warnings that were read'),
 })
 export type SignedBathOrder = z.infer<typeof SignedBathOrder>

@@ -93,6 +93,8 @@ export const cautionTitles = defineMessages({
   'under-default': 'Dose is far under its range',
   'no-default-range': 'No range to compare with',
   'default-not-comparable': 'Range can’t be compared',
+  'line-not-named': 'No dose line is named',
+  'beyond-every-line': 'Dose is beyond every dose line',
   'basis-missing': 'Figure does not say of what it is',
   'dose-early': 'Dose is early',
   'dose-very-early': 'Dose is much too early',
@@ -125,10 +127,10 @@ export const cautionTitles = defineMessages({
 /** What was found, in a sentence or two. */
 export const cautionTexts = defineMessages({
   'oxygen-unknown': (p) =>
-    `Oxygen was not read. Formalin needs a reading of at least ${p.floor}, at most ${minutes(p.maxAgeMinutes)} old.`,
+    `Oxygen was not read. A bath needs a reading of at least ${p.floor}, at most ${minutes(p.maxAgeMinutes)} old.`,
   'oxygen-old': (p) =>
     `Oxygen was ${p.oxygen} at ${p.readAt}, ${minutes(p.ageMinutes)} ago. It counts for ${minutes(p.maxAgeMinutes)}.`,
-  'oxygen-low': (p) => `Oxygen is ${p.oxygen}. Formalin needs at least ${p.floor}.`,
+  'oxygen-low': (p) => `Oxygen is ${p.oxygen}. A bath needs at least ${p.floor}.`,
   'oxygen-would-fall': (p) =>
     `Oxygen is ${p.oxygen}. This strength takes about ${p.takes} over a day and a half, which leaves ${p.predicted}; at least ${p.floor} has to be left.`,
   'oxygen-fall-unknown': (p) =>
@@ -241,8 +243,13 @@ export const cautionTexts = defineMessages({
   'far-over-default': (p) =>
     `${p.target} is ${p.factor.toFixed(1)} times the upper end of the dose line, ${p.high}.`,
   'under-default': (p) => `${p.target} is far below the lower end of the dose line, ${p.low}.`,
-  'no-default-range': () => 'The order names no dose line, so nothing shows whether the figure is usual.',
+  'no-default-range': () =>
+    'The formulary has no dose line in force for this drug and water, so nothing shows whether the figure is usual.',
   'default-not-comparable': () => 'The figure and the dose line are on different bases that nothing joins.',
+  'line-not-named': (p) =>
+    `The order names no dose line. ${p.target} was held against the highest of the drug, ${p.high}.`,
+  'beyond-every-line': (p) =>
+    `${p.target} is more than ${p.limitFactor} times ${p.high}, the highest dose line of this drug. A figure so far off is taken for a slip: check the decimal point and the unit.`,
   'basis-missing': () =>
     'Product or active part, salt or base, free or total: the same figure is another dose on another basis, up to four times as much.',
   'dose-early': (p) =>

@@ -22,7 +22,7 @@ export const cautionStageWords = defineMessages({
 
 /** One line for each rule, for the list of rules and for settings. */
 export const cautionRuleWords = defineMessages({
-  R01: 'Formalin: oxygen is read shortly before the dose and is high enough',
+  R01: 'Oxygen is read shortly before the dose and is high enough',
   R02: 'Formalin left in the water: the oxygen that it takes is there to be taken',
   R03: 'Formalin in ponds: not in warm water, in a bloom or with striped bass',
   R04: 'Formalin: contact time by stage and group of the animals',
@@ -42,7 +42,7 @@ export const cautionRuleWords = defineMessages({
   R22: 'Hydrogen peroxide: species, eggs and temperature',
   R23: 'Chloramine-T: acid and soft water',
   R24: 'Potassium permanganate: water, total of a day and repeats',
-  R26: 'The figure lies within the range of its dose line',
+  R26: 'The figure lies within the range of its dose line, or of the highest line where the order names none',
   R27: 'The figure says of what it is',
   R28: 'The dose lies within its window and the planned number',
   R31: 'Water tests are fresh',
@@ -51,6 +51,7 @@ export const cautionRuleWords = defineMessages({
   R39: 'A second person works out the amount',
   R41: 'The animals can bear a treatment',
   R42: 'First use of this drug in a taxon here',
+  R47: 'The figure is not beyond every dose line of the drug',
 } satisfies Record<CautionRuleId, string>)
 
 export const readingWords = defineMessages({
@@ -120,6 +121,7 @@ export const resolveWords = defineMessages({
   'check-figure': 'Check the figure, its decimal point and its unit.',
   'raise-target': 'Raise the target.',
   'choose-dose-line': 'Choose a line of the formulary to compare with.',
+  'confirm-dose-line': 'A veterinarian first confirms a dose line for it in the formulary.',
   'state-basis': 'Say of what the figure is: product, salt, base, active part, free or total.',
   'wait-for-window': 'Wait until the window of the dose opens.',
   'amend-order': 'A veterinarian amends the order.',
@@ -181,4 +183,5 @@ export const ruleParameterWords = defineMessages({
   amountMillilitres: 'Volume of product above which a second person works it out',
   amountShare: 'Share of the plan above which it is worked out again',
   unwellPercent: 'Share of unwell animals',
+  beyondFactor: 'Times the highest dose line that nobody can sign',
 } satisfies Record<RuleParameterKey, string>)

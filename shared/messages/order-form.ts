@@ -95,7 +95,6 @@ export const orderFormWords = defineMessages({
   overrideReason: 'Why it is overridden',
   overrideHint: 'Signed with the order, and printed on it.',
   overrideByVet: 'Only a veterinarian with a valid licence can override this.',
-  overrideAbove: 'The reason given above counts for this too.',
   countCautions: (p: { stops: number; warnings: number; notes: number }) =>
     [
       p.stops > 0 ? counted(p.stops, 'stop', 'stops') : '',

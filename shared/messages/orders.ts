@@ -29,6 +29,16 @@ export const orderMissing = defineMessages({
 })
 export type OrderField = keyof typeof orderMissing
 
+/** Why an order is refused, and what to do. */
+export const orderProblemWords = defineMessages({
+  lineNotInForce:
+    'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
+  lineOfOther: (p: { line: string; product: string }) =>
+    `This dose line is one of ${p.line}, and the product is ${p.product}. Choose a dose line of the product.`,
+  cautionsChanged:
+    'Nothing was signed. An answer belongs to no caution that stands now. Read the cautions as they are now, answer those, and sign again.',
+})
+
 export const volumeMethods = defineMessages({
   geometry: 'worked out from measurements',
   metered: 'metered',

@@ -15,6 +15,7 @@ import {
   aSchool,
   bathFields,
   readingsNow,
+  shownCautions,
   signDraft,
 } from '../builders/an-order.ts'
 import { newKey, password, startApi } from '../support/api.ts'
@@ -261,8 +262,12 @@ describe('an order for a bath', () => {
     const draft = await aDraft(api, praziFields())
     const { agent } = await api.as('veterinarian')
     const key = newKey()
-    const rules = ['R26', 'R31', 'R32', 'R41', 'R42', 'R14', 'R15', 'R16']
-    const body = { password, expectedVersion: draft.version, read: rules, overrides: [] }
+    const read = (await shownCautions(api, draft.number)).map(({ ruleId, code, text }) => ({
+      ruleId,
+      code,
+      text,
+    }))
+    const body = { password, expectedVersion: draft.version, read, overrides: [] }
     const send = () =>
       agent.post(`/api/orders/${draft.number}/signature`).set('Idempotency-Key', key).send(body)
     const replies = await Promise.all([send(), send()])

@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution, BathOrderFields, SaidCaution } from '../../shared/contracts/orders.contract.ts'
 import { newKey, password } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 import { aGroup, aTaxon } from './a-collection.ts'
@@ -69,6 +69,8 @@ export async function aSchool(
 
 /** A product with a usable lot, entered by the technician. */
 export async function aProduct(api: TestApi, given: object, expiresOn = '2028-03-31') {
+  // as at every start of the server: without a dose line to be held against, an order is stopped
+  await api.composition.formulary.service.loadDefaults()
   const { agent } = await api.as('technician')
   const id = api.nextId()
   const lotId = api.nextId()
@@ -140,21 +142,36 @@ export async function aDraft(api: TestApi, fields: BathOrderFields, by?: TestPer
   }
 }
 
-/** Signs a draft as the veterinarian: reads every warning, overrides every stop that can be. */
+/**
+ * Signs a draft as the veterinarian, who answers what the form shows: reads every warning, and overrides the stops of
+ * the rules that are named.
+ */
 export async function signDraft(
   api: TestApi,
   draft: { number: string; version: number },
-  more: { overrides?: { ruleId: string; reason: string }[]; read?: string[] } = {},
+  more: { overrides?: { ruleId: string; reason: string }[]; read?: AnsweredCaution[] } = {},
 ) {
   const { agent } = await api.as('veterinarian')
-  const rules = Array.from({ length: 46 }, (_, i) => `R${String(i + 1).padStart(2, '0')}`)
+  const shown = await shownCautions(api, draft.number)
+  const named = ({ ruleId, code, text }: SaidCaution) => ({ ruleId, code, text })
   return agent
     .post(`/api/orders/${draft.number}/signature`)
     .set('Idempotency-Key', newKey())
     .send({
       password,
       expectedVersion: draft.version,
-      read: more.read ?? rules,
-      overrides: more.overrides ?? [],
+      read: more.read ?? shown.filter(({ level }) => level === 'warning').map(named),
+      overrides: (more.overrides ?? []).flatMap(({ ruleId, reason }) =>
+        shown
+          .filter((one) => one.level === 'stop' && one.ruleId === ruleId)
+          .map((one) => ({ ...named(one), reason })),
+      ),
     })
+}
+
+/** The cautions that stand on the draft of an order now; none where it has no draft. */
+export async function shownCautions(api: TestApi, number: string): Promise<SaidCaution[]> {
+  const { agent } = await api.as('veterinarian')
+  const { draft } = (await agent.get(`/api/orders/${number}`)).body
+  return draft ? (await agent.post('/api/order-previews').send(draft)).body.cautions : []
 }

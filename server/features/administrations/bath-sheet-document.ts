@@ -218,6 +218,14 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           level: caution.level,
           title: caution.title,
           lines: [caution.text],
+          ...(caution.overridden
+            ? {
+                override: [
+                  { text: orderPaper.overridden({ name: caution.overridden.by }), bold: true },
+                  { text: orderPaper.reason({ reason: caution.overridden.reason }) },
+                ],
+              }
+            : {}),
         })),
       ),
       // a page of its own, without the amount, that can be handed to the second person

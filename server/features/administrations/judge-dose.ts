@@ -1,3 +1,6 @@
+import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
+import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
@@ -38,6 +41,27 @@ function firstIsOutdated({ judgement }: DoseSituation, first: CalculationReadRow
   )
 }
 
+/**
+ * The signed reason that a stop at the dose was already answered with: for the same finding of the same rule, on the
+ * facts that it was given for. A stop that did not stand at the signature was answered by nobody.
+ */
+export function overrideFor(content: SignedOrder, caution: Caution): SignedOrder['overrides'][number] | null {
+  if (caution.level !== 'stop' || !caution.overridable) return null
+  const own = content.overrides.find(
+    ({ ruleId, code }) => ruleId === caution.ruleId && (code ?? caution.code) === caution.code,
+  )
+  const facts = content.facts as unknown as CautionFacts | null
+  if (!own || !facts) return null
+  const told = JSON.stringify(caution.params)
+  const then = evaluateCautions({ facts, stage: 'design' }).cautions
+  return then.some(
+    (one) =>
+      one.ruleId === caution.ruleId && one.code === caution.code && JSON.stringify(one.params) === told,
+  )
+    ? own
+    : null
+}
+
 /** Everything that stands in the way of giving the dose now, in words. */
 export function obstacles(situation: DoseSituation, calculations: readonly CalculationReadRow[]): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
@@ -54,10 +78,9 @@ export function obstacles(situation: DoseSituation, calculations: readonly Calcu
         allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
       }),
     )
-  const overridden = new Set(content.overrides.map((override) => override.ruleId))
   const zone = judgement?.facts.zone ?? 'UTC'
   for (const caution of answer?.cautions ?? [])
-    if (caution.level === 'stop' && !(caution.overridable && overridden.has(caution.ruleId)))
+    if (caution.level === 'stop' && !overrideFor(content, caution))
       why.push(`${sayCaution(caution, zone).title}. ${sayCaution(caution, zone).text}`)
   if (needsSecond(situation)) {
     const first = calculations.find((one) => one.part === 'first')

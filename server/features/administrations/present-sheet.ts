@@ -17,9 +17,9 @@ import { recordOf } from './administrations.reads.ts'
 import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts'
 import { compareCalculations } from './compare-calculations.ts'
 import type { DoseSituation } from './dose-situation.ts'
-import { divisionOf, needsSecond, obstacles, secondStands } from './judge-dose.ts'
+import { divisionOf, needsSecond, obstacles, overrideFor, secondStands } from './judge-dose.ts'
 
-type SheetCaution = BathSheet['cautions'][number]
+type SheetCaution = RecordedDose['exceptions'][number]
 const mayBe: Action[] = ['dose.give', 'dose.record', 'dose.calculate-second', 'bath.stop', 'order.hold']
 
 export const saidForSheet = (caution: Caution, zone: string): SheetCaution => {
@@ -218,6 +218,15 @@ const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['p
   'calculate-again-by-another': 'second-calculation',
 }
 
+/** Who overrode a stop at the signature and why; null while it is open. */
+function presentOverride(
+  { content, block }: DoseSituation,
+  caution: Caution,
+): BathSheet['cautions'][number]['overridden'] {
+  const override = overrideFor(content, caution)
+  return override && { by: block.printedName, reason: override.reason }
+}
+
 /** What a sheet is made from, the moment it is made for, and for whom. */
 export interface SheetRequest {
   situation: DoseSituation
@@ -286,7 +295,10 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
         })),
     driftPercent: drift?.percent ?? null,
     driftWithin: drift?.within ?? false,
-    cautions: (answer?.cautions ?? []).map((caution) => saidForSheet(caution, zone)),
+    cautions: (answer?.cautions ?? []).map((caution) => ({
+      ...saidForSheet(caution, zone),
+      overridden: presentOverride(situation, caution),
+    })),
     steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
     first: presentFirst(first, hide, actor),

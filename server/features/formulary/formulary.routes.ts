@@ -9,6 +9,8 @@ export interface FormularyQueries {
   product(id: string): Promise<Product>
   productOfLot(lotId: string): Promise<Product>
   doseLine(id: string): Promise<DoseLine>
+  /** The lines in force for an agent: proposals are none. */
+  doseLinesOf(agent: DoseLine['agent']): Promise<DoseLine[]>
 }
 
 export function formularyRoutes(service: FormularyService, queries: FormularyQueries): Route[] {

@@ -35,6 +35,10 @@ export function createFormulary(parts: Parts & { facility: FacilityService; peop
       if (id === null) throw new Problem('not-found')
       return queries.product(id)
     },
+    async doseLinesOf(agent) {
+      const rows = (await readDoseLines(dataSource)).filter((row) => row.agent === agent)
+      return rows.map(presentDoseLine).filter((line) => line.state !== 'proposed')
+    },
     async doseLine(id) {
       const row = await readDoseLine(dataSource, id)
       if (!row) throw new Problem('not-found')

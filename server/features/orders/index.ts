@@ -1,4 +1,5 @@
 import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -29,6 +30,7 @@ import { createOrdersService } from './orders.service.ts'
 import { createOrderPrinter, orderPrintKind } from './print-order.ts'
 import { answerForOrderPrints } from './print-state.ts'
 
+export { saidCautions } from './say-order.ts'
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
 export { orderNotice } from './order-document.ts'
@@ -62,6 +64,7 @@ export function createOrders(parts: OrdersOutside) {
     facts,
     product: (id: string) => formulary.queries.product(id),
     doseLine: (id: string) => formulary.queries.doseLine(id),
+    doseLinesOf: (agent: AgentCode) => formulary.queries.doseLinesOf(agent),
   }
   const course = createCourseReporter(parts)
   const service = createOrdersService({

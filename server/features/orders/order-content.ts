@@ -1,19 +1,23 @@
-import type { BathOrderFields, SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type {
+  AnsweredCaution,
+  BathOrderFields,
+  SaidCaution,
+} from '../../../shared/contracts/orders.contract.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import type { BathDose } from '../../../shared/domain/dose/bath-dose.ts'
+import type { SignedAnswer } from '../../../shared/domain/orders/signed-answers.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { agentNames, basisNames } from '../../../shared/messages/formulary.ts'
 import type { WaterFacts } from '../water/index.ts'
 import type { OrderSituation } from './order-situation.ts'
 import { saidWater } from './preview-order.ts'
-import { saidAmount, saidCaution, saidCondition, saidLine } from './say-order.ts'
+import { saidAmount, saidCautions, saidCondition, saidLine } from './say-order.ts'
 
 /** Raised whenever the engines change in a way that could change a figure; stands in every signed order. */
 export const engineVersion = 1
 
-export interface Override {
-  ruleId: string
+export interface Override extends AnsweredCaution {
   reason: string
 }
 
@@ -51,8 +55,8 @@ export interface SignedOrder {
   working: ReturnType<typeof saidLine>[]
   cautions: SaidCaution[]
   conditions: ReturnType<typeof saidCondition>[]
-  overrides: Override[]
-  read: string[]
+  overrides: (SignedAnswer & { reason: string })[]
+  read: (string | SignedAnswer)[]
   facts: Json
 }
 
@@ -65,7 +69,7 @@ export interface ContentRequest {
   dose: BathDose
   volume: NonNullable<WaterFacts['volume']>
   overrides: Override[]
-  read: string[]
+  read: AnsweredCaution[]
 }
 
 /** Puts the content of a signature together. */
@@ -112,10 +116,10 @@ export function contentOf(request: ContentRequest): SignedOrder {
     basisText: fields.basis ? basisNames[fields.basis] : '',
     amount: saidAmount(dose),
     working: dose.working.map(saidLine),
-    cautions: judgement?.answer.cautions.map((caution) => saidCaution(caution, base.zone)) ?? [],
+    cautions: saidCautions(found),
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,
-    read: [...request.read].sort(),
+    read: request.read,
     facts: JSON.parse(JSON.stringify(judgement?.facts ?? null)) as Json,
   }
 }

@@ -1,3 +1,4 @@
+import { overrideOf } from '../../../shared/domain/orders/signed-answers.ts'
 import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
@@ -124,13 +125,13 @@ function workingBlock({ content }: OrderPaper): DocumentBlock {
 function cautionBlocks({ content, block }: OrderPaper): DocumentBlock[] {
   if (content.cautions.length === 0) return [{ kind: 'paragraph', text: orderPaper.noCautions }]
   return content.cautions.map((caution) => {
-    const override = content.overrides.find((one) => one.ruleId === caution.ruleId)
+    const override = overrideOf(content.overrides, caution)
     return {
       kind: 'caution',
       level: caution.level,
       title: caution.title,
       lines: [caution.text],
-      ...(override && caution.level === 'stop'
+      ...(override
         ? {
             override: [
               { text: orderPaper.overridden({ name: block.printedName }), bold: true },

@@ -9,7 +9,8 @@ import type { ConcentrationUnit } from '../../../shared/domain/cautions/caution-
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
-import { orderMissing } from '../../../shared/messages/orders.ts'
+import { agentNames } from '../../../shared/messages/formulary.ts'
+import { orderMissing, orderProblemWords } from '../../../shared/messages/orders.ts'
 import type { OrderField } from '../../../shared/messages/orders.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -19,6 +20,8 @@ export interface SituationParts {
   facts: BathFactsReader
   product(id: string): Promise<Product>
   doseLine(id: string): Promise<DoseLine>
+  /** The dose lines in force for an agent. */
+  doseLinesOf(agent: Product['agent']): Promise<DoseLine[]>
 }
 
 /** An order judged at one instant, together with everything it was judged by. */
@@ -47,7 +50,12 @@ export function draftOf(fields: BathOrderFields): BathOrderDraft {
 }
 
 /** A product of the formulary in the terms of the dose engine. */
-export function chosenOf(product: Product, line: DoseLine | null, lotId: string | null): ChosenProduct {
+export function chosenOf(
+  product: Product,
+  line: DoseLine | null,
+  lines: readonly DoseLine[],
+  lotId: string | null,
+): ChosenProduct {
   const lot = product.lots.find((one) => one.id === lotId) ?? null
   const bath: BathProduct = {
     form: product.form === 'liquid' ? 'liquid' : 'solid',
@@ -62,14 +70,37 @@ export function chosenOf(product: Product, line: DoseLine | null, lotId: string 
     agent: product.agent,
     product: bath,
     lot: lot && { expiresOn: lot.expiresOn, state: lot.state, foundClearAt: lot.foundClearAt },
-    line: line && {
-      low: line.low,
-      high: line.high,
-      unit: line.unit as ConcentrationUnit,
-      basis: line.basis,
-      longestContactMinutes: line.longestContactMinutes,
-    },
+    line: line && { ...rangeOf(line), longestContactMinutes: line.longestContactMinutes },
+    lines: lines.map((one) => ({ ...rangeOf(one), water: one.water })),
   }
+}
+
+const rangeOf = ({ low, high, unit, basis }: DoseLine) => ({
+  low,
+  high,
+  unit: unit as ConcentrationUnit,
+  basis,
+})
+
+/**
+ * Refuses an order that names a dose line of another drug, or one that is not in force. A signed order keeps the line it
+ * was signed with, whatever becomes of it.
+ */
+export async function refuseDoseLine(parts: SituationParts, fields: BathOrderFields): Promise<void> {
+  const { productId, doseLineId } = fields
+  if (productId === null || doseLineId === null) return
+  const { agent } = await parts.product(productId)
+  const line = await parts.doseLine(doseLineId)
+  const inForce = await parts.doseLinesOf(agent)
+  if (inForce.some((one) => one.id === line.id)) return
+  const detail =
+    line.agent === agent
+      ? orderProblemWords.lineNotInForce
+      : orderProblemWords.lineOfOther({ line: agentNames[line.agent], product: agentNames[agent] })
+  throw new Problem('dose-line-not-usable', {
+    detail,
+    errors: [{ pointer: '/fields/doseLineId', detail, code: 'dose-line-not-usable' }],
+  })
 }
 
 /** The refusal of an enclosure that is not there or that nothing can be dissolved in. */
@@ -91,7 +122,7 @@ export async function readSituation(
     ? judgeBathOrder(
         situation.base,
         draftOf(fields),
-        chosenOf(product, line, fields.lotId),
+        chosenOf(product, line, await parts.doseLinesOf(product.agent), fields.lotId),
         {},
         options.stage,
       )

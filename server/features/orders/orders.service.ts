@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution, BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { convert } from '../../../shared/domain/units/convert.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
@@ -13,13 +13,21 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { SigningService } from '../signing/index.ts'
+import { checkAnswers } from './check-answers.ts'
 import { contentOf } from './order-content.ts'
 import type { Override } from './order-content.ts'
 import type { OrderEventRow, OrderHead } from './order.entity.ts'
-import { missingFields, missingProblem, noWaterProblem, readSituation } from './order-situation.ts'
-import type { OrderSituation, SituationParts } from './order-situation.ts'
+import {
+  missingFields,
+  missingProblem,
+  noWaterProblem,
+  readSituation,
+  refuseDoseLine,
+} from './order-situation.ts'
+import type { SituationParts } from './order-situation.ts'
 import type { CourseReporter } from './report-course.ts'
 import * as repository from './orders.repository.ts'
+import { saidCautions } from './say-order.ts'
 
 export interface OrdersParts extends SituationParts {
   transactions: Transactions
@@ -36,7 +44,7 @@ export interface OrdersParts extends SituationParts {
 export interface SignRequest {
   password: string
   expectedVersion: number
-  read: string[]
+  read: AnsweredCaution[]
   overrides: Override[]
 }
 
@@ -72,29 +80,6 @@ export function createOrdersService(parts: OrdersParts) {
       throw new Problem('order-ended', { detail: 'Write a new order.' })
   }
 
-  /** Every stop needs its own signed reason, and some take none; every warning has to have been read. */
-  function checkAnswers(found: OrderSituation, request: SignRequest): void {
-    const cautions = found.judgement?.answer.cautions ?? []
-    const open = cautions.filter(
-      (caution) =>
-        caution.level === 'stop' &&
-        !(caution.overridable && request.overrides.some((override) => override.ruleId === caution.ruleId)),
-    )
-    if (open.length > 0)
-      throw new Problem('caution-stops', {
-        detail: 'Remove the cause, or override with a reason where that is possible.',
-        extra: { cautions: open.map(({ ruleId, code, overridable }) => ({ ruleId, code, overridable })) },
-      })
-    const unread = cautions.filter(
-      (caution) => caution.level === 'warning' && !request.read.includes(caution.ruleId),
-    )
-    if (unread.length > 0)
-      throw new Problem('cautions-unread', {
-        detail: 'Read each warning, then sign.',
-        extra: { cautions: unread.map(({ ruleId, code }) => ({ ruleId, code })) },
-      })
-  }
-
   async function noteEvent(
     tx: Tx,
     order: OrderHead,
@@ -125,6 +110,7 @@ export function createOrdersService(parts: OrdersParts) {
       fields: BathOrderFields,
     ): Promise<{ number: string }> {
       if (!(await parts.hasWater(fields.enclosureId))) throw noWaterProblem()
+      await refuseDoseLine(parts, fields)
       return parts.transactions.inTransaction(context, async (tx) => {
         const earlier = await repository.findOrderById(tx, id)
         if (earlier) {
@@ -157,6 +143,7 @@ export function createOrdersService(parts: OrdersParts) {
       expectedVersion: number,
       fields: BathOrderFields,
     ) {
+      await refuseDoseLine(parts, fields)
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await refuseEnded(tx, order)
@@ -208,8 +195,9 @@ export function createOrdersService(parts: OrdersParts) {
         const fields = JSON.parse(order.draftText) as BathOrderFields
         const missing = missingFields(fields)
         if (missing.length > 0) throw missingProblem(missing)
+        await refuseDoseLine(parts, fields)
         const found = await readSituation(parts, fields, tx.at, { db: tx.manager, exceptOrderId: order.id })
-        checkAnswers(found, request)
+        checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
         const volume = situation.water.volume
         if (!judgement?.dose || !judgement.dose.measured || !product || !volume || fields.startsAt === null)

@@ -8,7 +8,7 @@ import type { AnimalFacts } from '../animals/index.ts'
 import type { WaterFacts } from '../water/index.ts'
 import { missingFields } from './order-situation.ts'
 import type { OrderSituation } from './order-situation.ts'
-import { saidAmount, saidCaution, saidCondition, saidLine } from './say-order.ts'
+import { saidAmount, saidCautions, saidCondition, saidLine } from './say-order.ts'
 
 /** How many animals, in words. */
 export function countText({ count }: AnimalFacts): string {
@@ -66,7 +66,7 @@ export function presentPreview(fields: BathOrderFields, found: OrderSituation): 
     refusal: saidRefusal(found),
     working: judgement?.dose?.working.map(saidLine) ?? [],
     water: saidWater(situation.water, situation.animals, fields.animalIds),
-    cautions: judgement?.answer.cautions.map((caution) => saidCaution(caution, zone)) ?? [],
+    cautions: saidCautions(found),
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, zone)) ?? [],
     missing: missingFields(fields).map((field) => orderMissing[field]),
   }

@@ -12,6 +12,7 @@ import type { WorkingLine } from '../../../shared/domain/working/working-line.ts
 import { sayCaution, sayCondition } from '../../../shared/messages/say-caution.ts'
 import { orderWords } from '../../../shared/messages/orders.ts'
 import { workingLabels } from '../../../shared/messages/working.ts'
+import type { OrderSituation } from './order-situation.ts'
 
 type Line = OrderPreview['working'][number]
 type Condition = OrderPreview['conditions'][number]
@@ -34,6 +35,10 @@ export function saidCaution(caution: Caution, zone: string): SaidCaution {
     secondCalculation: needsSecond(caution.effects),
   }
 }
+
+/** Every caution of a judged order, in words. */
+export const saidCautions = ({ judgement, situation }: OrderSituation): SaidCaution[] =>
+  judgement?.answer.cautions.map((caution) => saidCaution(caution, situation.base.zone)) ?? []
 
 export function saidCondition(condition: CautionCondition, zone: string): Condition {
   return {

@@ -108,6 +108,8 @@ export interface CautionParams {
   'under-default': { target: CautionQuantity; low: CautionQuantity }
   'no-default-range': Record<never, never>
   'default-not-comparable': Record<never, never>
+  'line-not-named': { target: CautionQuantity; high: CautionQuantity }
+  'beyond-every-line': { target: CautionQuantity; high: CautionQuantity; limitFactor: number }
   'basis-missing': Record<never, never>
   'dose-early': { hours: number; earliestHours: number }
   'dose-very-early': { hours: number; intervalHours: number }
@@ -186,6 +188,7 @@ export type ResolveCode =
   | 'check-figure'
   | 'raise-target'
   | 'choose-dose-line'
+  | 'confirm-dose-line'
   | 'state-basis'
   | 'wait-for-window'
   | 'amend-order'

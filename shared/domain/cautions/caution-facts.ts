@@ -95,6 +95,8 @@ export interface CautionFacts {
     startsAt: Fact<Instant>
     endsAt: Fact<Instant>
     defaultRange: Fact<DefaultRange>
+    /** The ranges of every dose line in force for this agent in this kind of water, whether the order names one or not. */
+    agentRanges: Fact<readonly DefaultRange[]>
     amountGrams: Fact<number>
     amountMillilitres: Fact<number>
     /** Amount now ÷ amount planned. */

@@ -41,6 +41,7 @@ export const cautionRuleIds = [
   'R39',
   'R41',
   'R42',
+  'R47',
 ] as const
 export type CautionRuleId = (typeof cautionRuleIds)[number]
 
@@ -103,6 +104,7 @@ export const ruleParameterKeys = [
   'amountMillilitres',
   'amountShare',
   'unwellPercent',
+  'beyondFactor',
 ] as const
 export type RuleParameterKey = (typeof ruleParameterKeys)[number]
 

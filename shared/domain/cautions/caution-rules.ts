@@ -1,5 +1,5 @@
 import type { CautionRule } from './caution-rule.ts'
-import { formalinOxygen } from './rules/r01-formalin-oxygen.ts'
+import { oxygen } from './rules/r01-oxygen.ts'
 import { formalinOxygenDemand } from './rules/r02-formalin-oxygen-demand.ts'
 import { formalinPond } from './rules/r03-formalin-pond.ts'
 import { formalinTime } from './rules/r04-formalin-time.ts'
@@ -28,10 +28,11 @@ import { lot } from './rules/r34-lot.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
+import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
 
 /** Every rule, in the order of its number, which is also the order of equal cautions on screen. */
 export const cautionRules: readonly CautionRule[] = [
-  formalinOxygen,
+  oxygen,
   formalinOxygenDemand,
   formalinPond,
   formalinTime,
@@ -60,4 +61,5 @@ export const cautionRules: readonly CautionRule[] = [
   secondCalculation,
   weakAnimals,
   firstUse,
+  beyondEveryLine,
 ]

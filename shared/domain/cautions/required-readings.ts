@@ -4,28 +4,29 @@ import type { Fact } from './fact.ts'
 import { valueOf } from './fact.ts'
 import type { ReadingName } from './reading-name.ts'
 
+/** Beside oxygen, which every bath asks for. */
 const byAgent: Record<
   AgentCode,
   { always: readonly ReadingName[]; fresh?: readonly ReadingName[]; marine?: readonly ReadingName[] }
 > = {
-  formalin: { always: ['oxygen', 'temperature'] },
+  formalin: { always: ['temperature'] },
   'copper-sulfate': { always: ['pH'], fresh: ['alkalinity'], marine: ['free-copper'] },
   'chelated-copper': { always: ['pH', 'total-copper'] },
   chloroquine: { always: ['temperature'] },
-  praziquantel: { always: ['oxygen', 'temperature'] },
-  'hydrogen-peroxide': { always: ['oxygen', 'temperature'] },
-  'chloramine-t': { always: ['oxygen', 'pH', 'alkalinity'] },
-  tricaine: { always: ['oxygen', 'pH', 'temperature'] },
+  praziquantel: { always: ['temperature'] },
+  'hydrogen-peroxide': { always: ['temperature'] },
+  'chloramine-t': { always: ['pH', 'alkalinity'] },
+  tricaine: { always: ['pH', 'temperature'] },
   'sodium-chloride': { always: ['temperature'] },
-  'potassium-permanganate': { always: ['oxygen', 'pH'] },
-  'methylene-blue': { always: ['oxygen'] },
+  'potassium-permanganate': { always: ['pH'] },
+  'methylene-blue': { always: [] },
   metronidazole: { always: ['temperature'] },
   oxytetracycline: { always: ['pH', 'temperature'] },
   fenbendazole: { always: ['temperature'] },
 }
 
 /**
- * The readings of the water that an agent asks for before a dose. Water of unknown kind asks for those of both kinds.
+ * The readings of the water that a bath asks for before a dose: oxygen whatever the agent, and what the agent needs. Water of unknown kind asks for those of both kinds.
  *
  * @source project-default: the rule (R31) names the readings, which agent needs which is ours
  */
@@ -34,7 +35,7 @@ export function requiredReadings(facts: CautionFacts): readonly ReadingName[] {
   const kind = valueOf(facts.water.kind)
   const isFresh = kind === null || kind === 'fresh' || kind === 'brackish'
   const isMarine = kind === null || kind === 'marine' || kind === 'brackish'
-  return [...always, ...(isFresh ? fresh : []), ...(isMarine ? marine : [])]
+  return ['oxygen', ...always, ...(isFresh ? fresh : []), ...(isMarine ? marine : [])]
 }
 
 export const readingFacts: Record<ReadingName, FactPath> = {

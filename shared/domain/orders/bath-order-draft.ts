@@ -1,5 +1,6 @@
 import type { AgentCode } from '../formulary/agent.ts'
 import type { BathProduct } from '../dose/bath-product.ts'
+import type { WaterKind } from '../formulary/dose-line.ts'
 import type { DefaultRange } from '../cautions/caution-facts.ts'
 import type { FacilityDate, Instant } from '../time/instant.ts'
 import type { ConcentrationBasis } from '../units/basis.ts'
@@ -33,10 +34,12 @@ export interface StatedFacts {
   experienceWith: readonly string[]
 }
 
-/** The product chosen, with the lot if one is chosen and the dose line it is ordered by. */
+/** The product chosen, with the lot if one is chosen, the dose line it is ordered by, and all those it could be. */
 export interface ChosenProduct {
   agent: AgentCode
   product: BathProduct
   lot: { expiresOn: FacilityDate; state: string; foundClearAt: Instant | null } | null
   line: (DefaultRange & { longestContactMinutes: number | null }) | null
+  /** Every dose line in force for the agent; what an order is held against that names none of them. */
+  lines: readonly (DefaultRange & { water: WaterKind })[]
 }

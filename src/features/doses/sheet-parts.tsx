@@ -2,6 +2,7 @@ import { OctagonX } from 'lucide-react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
 import { Facts } from '../../ui/facts.tsx'
@@ -133,8 +134,17 @@ export function CautionsNow({ sheet }: { sheet: BathSheet }) {
     <section className="stack">
       <h2 className="t-head">{words.cautions}</h2>
       {cautions.map((caution) => (
-        <CautionBlock key={`${caution.ruleId} ${caution.code}`} level={caution.level} title={caution.title}>
-          {[caution.text, ...caution.resolve].join(' ')}
+        <CautionBlock
+          key={`${caution.ruleId} ${caution.code}`}
+          level={caution.level}
+          title={caution.title}
+          answer={
+            caution.overridden
+              ? orderViewWords.overridden({ name: caution.overridden.by, reason: caution.overridden.reason })
+              : undefined
+          }
+        >
+          {[caution.text, ...(caution.overridden ? [] : caution.resolve)].join(' ')}
         </CautionBlock>
       ))}
     </section>

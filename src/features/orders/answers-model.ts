@@ -5,7 +5,7 @@ import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 export interface Answers {
   /** Keys of warnings that were ticked; one whose words change has to be read again. */
   read: readonly string[]
-  /** Reasons by rule. */
+  /** Reasons by the key of the stop: one whose words change needs a reason of its own. */
   reasons: Readonly<Record<string, string>>
 }
 
@@ -16,8 +16,10 @@ export const cautionKey = (caution: Pick<SaidCaution, 'ruleId' | 'code' | 'text'
   `${caution.ruleId} ${caution.code} ${caution.text}`
 
 const shortestReason = 3
-const hasReason = (answers: Answers, ruleId: string) =>
-  (answers.reasons[ruleId] ?? '').trim().length >= shortestReason
+const reasonOf = (answers: Answers, caution: SaidCaution) =>
+  (answers.reasons[cautionKey(caution)] ?? '').trim()
+const hasReason = (answers: Answers, caution: SaidCaution) =>
+  reasonOf(answers, caution).length >= shortestReason
 
 /** Stops that nobody answered yet: fixed ones cannot be, others need a reason. */
 export function openStops(
@@ -25,10 +27,9 @@ export function openStops(
   answers: Answers,
 ): { fixed: number; open: number } {
   const stops = cautions.filter((caution) => caution.level === 'stop')
-  const rules = new Set(stops.filter((caution) => caution.overridable).map((caution) => caution.ruleId))
   return {
     fixed: stops.filter((caution) => !caution.overridable).length,
-    open: [...rules].filter((ruleId) => !hasReason(answers, ruleId)).length,
+    open: stops.filter((caution) => caution.overridable && !hasReason(answers, caution)).length,
   }
 }
 
@@ -39,17 +40,17 @@ export function unreadWarnings(cautions: readonly SaidCaution[], answers: Answer
   )
 }
 
-/** The answers as a signature sends them: a rule counts as read when every warning of it was. */
+/** The answers as a signature sends them: to the cautions that stand now, each as it was read. */
 export function answersToSend(cautions: readonly SaidCaution[], answers: Answers) {
-  const rulesOf = (level: SaidCaution['level']) => [
-    ...new Set(cautions.filter((caution) => caution.level === level).map((caution) => caution.ruleId)),
-  ]
-  const unread = new Set(unreadWarnings(cautions, answers).map((caution) => caution.ruleId))
+  const named = ({ ruleId, code, text }: SaidCaution) => ({ ruleId, code, text })
+  const of = (level: SaidCaution['level']) => cautions.filter((caution) => caution.level === level)
   return {
-    read: rulesOf('warning').filter((ruleId) => !unread.has(ruleId)),
-    overrides: rulesOf('stop')
-      .filter((ruleId) => hasReason(answers, ruleId))
-      .map((ruleId) => ({ ruleId, reason: (answers.reasons[ruleId] ?? '').trim() })),
+    read: of('warning')
+      .filter((caution) => answers.read.includes(cautionKey(caution)))
+      .map(named),
+    overrides: of('stop')
+      .filter((caution) => hasReason(answers, caution))
+      .map((caution) => ({ ...named(caution), reason: reasonOf(answers, caution) })),
   }
 }
 

@@ -38,11 +38,9 @@ export function JudgedCautions({
       <p className="t-2" role="status">
         {cautionCount(cautions)}
       </p>
-      {sorted.map((caution, i) => {
+      {sorted.map((caution) => {
         const key = cautionKey(caution)
         const isStop = caution.level === 'stop'
-        const firstOfRule =
-          sorted.findIndex((one) => one.level === 'stop' && one.ruleId === caution.ruleId) === i
         return (
           <CautionBlock
             key={key}
@@ -54,22 +52,20 @@ export function JudgedCautions({
               isStop ? (
                 !maySign ? (
                   <p className="hint">{words.overrideByVet}</p>
-                ) : firstOfRule ? (
+                ) : (
                   <TextareaField
                     label={words.overrideReason}
                     hint={words.overrideHint}
                     rows={2}
                     maxLength={2000}
-                    value={answers.reasons[caution.ruleId] ?? ''}
+                    value={answers.reasons[key] ?? ''}
                     onChange={(event) =>
                       onAnswers({
                         ...answers,
-                        reasons: { ...answers.reasons, [caution.ruleId]: event.target.value },
+                        reasons: { ...answers.reasons, [key]: event.target.value },
                       })
                     }
                   />
-                ) : (
-                  <p className="hint">{words.overrideAbove}</p>
                 )
               ) : caution.level === 'warning' && maySign ? (
                 <Tick

@@ -12,6 +12,7 @@ import type { BathOrderFields } from '../../../shared/contracts/orders.contract.
 import { addressOf, api } from '../../lib/api-client.ts'
 
 export const ordersKey = ['orders'] as const
+export const previewsKey = [...ordersKey, 'preview'] as const
 
 export type OrdersAsked = Partial<QueryOf<typeof listOrders>>
 
@@ -38,7 +39,7 @@ export const doseNowQuery = (number: string, key: string) =>
 /** An order worked out and judged as it is being written; nothing is kept. */
 export const previewQuery = (fields: BathOrderFields | null) =>
   queryOptions({
-    queryKey: [...ordersKey, 'preview', fields],
+    queryKey: [...previewsKey, fields],
     queryFn: ({ signal }) => {
       if (!fields) throw new Error('Nothing to judge yet')
       return api(previewOrder, { body: fields, signal })

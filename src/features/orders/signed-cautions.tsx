@@ -1,5 +1,6 @@
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import type { SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import { overrideOf, wasRead } from '../../../shared/domain/orders/signed-answers.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { cautionKey } from './answers-model.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
@@ -32,10 +33,9 @@ export function CautionSource({ caution }: { caution: SaidCaution }) {
 /** Cautions as they stood at the signature, with who read or overrode each and why. */
 export function SignedCautions({ content, signer }: { content: SignedBathOrder; signer: string }) {
   const answerOf = (caution: SaidCaution) => {
-    const override = content.overrides.find((one) => one.ruleId === caution.ruleId)
-    if (caution.level === 'stop' && override)
-      return words.overridden({ name: signer, reason: override.reason })
-    return caution.level === 'warning' && content.read.includes(caution.ruleId)
+    const override = overrideOf(content.overrides, caution)
+    if (override) return words.overridden({ name: signer, reason: override.reason })
+    return caution.level === 'warning' && wasRead(content.read, caution)
       ? words.wasRead({ name: signer })
       : undefined
   }

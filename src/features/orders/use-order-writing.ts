@@ -1,11 +1,11 @@
 import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
-import type { BathOrderFields, Order } from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution, BathOrderFields, Order } from '../../../shared/contracts/orders.contract.ts'
 import { newId } from '../../lib/new-id.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import type { ProblemError } from '../../lib/problem-error.ts'
 import { useDraftOrder, useReviseDraft, useSignOrder } from './mutations.ts'
-import { orderQuery } from './queries.ts'
+import { orderQuery, previewsKey } from './queries.ts'
 
 interface Kept {
   number: string
@@ -18,8 +18,8 @@ interface Kept {
 
 export interface SignRequest {
   password: string
-  read: string[]
-  overrides: { ruleId: string; reason: string }[]
+  read: AnsweredCaution[]
+  overrides: (AnsweredCaution & { reason: string })[]
 }
 
 /**
@@ -56,6 +56,9 @@ export function useOrderWriting(opened: Order | null, openedFields: BathOrderFie
     if (!isProblem(error)) throw error
     setProblem(error)
     setRefusedAt(at)
+    // what was answered is judged anew, so that what stands now is there to be read
+    if (isProblem(error, 'caution-not-fired', 'caution-stops', 'cautions-unread'))
+      await client.invalidateQueries({ queryKey: previewsKey })
     if (kept && isProblem(error, 'stale-version', 'nothing-to-sign', 'order-ended'))
       await askTheirs(kept.number)
     return null

@@ -162,6 +162,7 @@ describe('what the sheet shows once', () => {
     title: 'Missing',
     text: 'No.',
     resolve: [],
+    overridden: null,
   }
   it('says a caution in its step and not a second time', () => {
     const one = sheet({

@@ -51,9 +51,18 @@ const preview = (more: Partial<OrderPreview> = {}): OrderPreview => ({
 describe('answers to cautions', () => {
   it('count a stop as answered only by a reason in words, and some stops never', () => {
     expect(openStops(all, noAnswers)).toEqual({ fixed: 0, open: 1 })
-    expect(openStops(all, { read: [], reasons: { R09: '  ' } })).toEqual({ fixed: 0, open: 1 })
-    expect(openStops(all, { read: [], reasons: { R09: 'moved before' } })).toEqual({ fixed: 0, open: 0 })
-    expect(openStops([basis], { read: [], reasons: { R27: 'I know' } })).toEqual({ fixed: 1, open: 0 })
+    expect(openStops(all, { read: [], reasons: { [cautionKey(copper)]: '  ' } })).toEqual({
+      fixed: 0,
+      open: 1,
+    })
+    expect(openStops(all, { read: [], reasons: { [cautionKey(copper)]: 'moved before' } })).toEqual({
+      fixed: 0,
+      open: 0,
+    })
+    expect(openStops([basis], { read: [], reasons: { [cautionKey(basis)]: 'I know' } })).toEqual({
+      fixed: 1,
+      open: 0,
+    })
   })
 
   it('count each warning as read by its own words', () => {
@@ -63,22 +72,26 @@ describe('answers to cautions', () => {
     expect(unreadWarnings([changed], read)).toEqual([changed])
   })
 
-  it('send a rule as read only when every warning of it was, and reasons without the space around them', () => {
-    const half = { read: [cautionKey(unwell)], reasons: { R09: ' moved before ' } }
-    expect(answersToSend(all, half)).toEqual({
-      read: [],
-      overrides: [{ ruleId: 'R09', reason: 'moved before' }],
+  it('are sent to the caution that was read, in its words, with reasons without the space around them', () => {
+    const answered = {
+      read: [cautionKey(unwell)],
+      reasons: { [cautionKey(copper)]: ' moved before ' },
+    }
+    expect(answersToSend(all, answered)).toEqual({
+      read: [{ ruleId: 'R41', code: 'a-code', text: 'Unwell?' }],
+      overrides: [{ ruleId: 'R09', code: 'a-code', text: 'Said.', reason: 'moved before' }],
     })
-    const whole = { ...half, read: [cautionKey(unwell), cautionKey(handled)] }
-    expect(answersToSend(all, whole).read).toEqual(['R41'])
-    // a reason for a rule that does not fire any more is not sent
-    expect(answersToSend([unwell], whole).overrides).toEqual([])
+    // a reason for a stop that does not stand any more, or stands in other words, is not sent
+    expect(answersToSend([unwell], answered).overrides).toEqual([])
+    const changed = { ...copper, text: 'Another shrimp.' }
+    expect(answersToSend([changed], answered).overrides).toEqual([])
+    expect(openStops([changed], answered).open).toBe(1)
   })
 
   it('say what stands in the way of a signature, the first thing first', () => {
     const answered = {
       read: [cautionKey(unwell), cautionKey(handled)],
-      reasons: { R09: 'moved before' },
+      reasons: { [cautionKey(copper)]: 'moved before' },
     }
     const why = (more: Partial<Parameters<typeof whyNotSign>[0]> = {}) =>
       whyNotSign({ preview: preview(), current: true, answers: answered, faults: 0, ...more })

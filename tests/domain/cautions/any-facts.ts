@@ -47,6 +47,8 @@ const use = fc.record({
   until: fc.option(instant),
 })
 
+const range = fc.record({ low: fc.option(figure), high: figure, unit, basis })
+
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
@@ -60,7 +62,8 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     setting: anyFact(fc.constantFrom('tank' as const, 'raceway' as const, 'pond' as const)),
     startsAt: anyFact(instant),
     endsAt: anyFact(instant),
-    defaultRange: anyFact(fc.record({ low: fc.option(figure), high: figure, unit, basis })),
+    defaultRange: anyFact(range),
+    agentRanges: anyFact(fc.array(range, { maxLength: 3 })),
     amountGrams: anyFact(figure),
     amountMillilitres: anyFact(figure),
     amountShareOfPlan: anyFact(figure),

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { CautionFacts, DoseTarget } from '../../../shared/domain/cautions/caution-facts.ts'
 import { known, unknown } from '../../../shared/domain/cautions/fact.ts'
+import { agentCodes } from '../../../shared/domain/formulary/agent.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import { instantOfLocalTime } from '../../../shared/domain/time/local-time.ts'
 import { cautions, firedBy, formalin, read, someFacts } from './some-facts.ts'
@@ -17,7 +18,17 @@ const mg = (value: number, basis: DoseTarget['basis'] = 'active'): DoseTarget =>
 const cuso = (target: DoseTarget, kind: 'fresh' | 'brackish' | 'marine', change: Change = {}) =>
   someFacts('copper-sulfate', target, { ...change, water: { kind: known(kind), ...change?.water } })
 
-describe('R26, R27: the figure itself', () => {
+describe('R26, R27, R47: the figure itself', () => {
+  /** No line is named; the formulary has two, 2 and 10 mg/L. */
+  const unnamed = {
+    order: {
+      defaultRange: unknown(),
+      agentRanges: known([
+        { low: 2, high: 2, unit: 'mg/L', basis: 'active' },
+        { low: 10, high: 10, unit: 'mg/L', basis: 'active' },
+      ]),
+    },
+  } satisfies Change
   const range = (
     low: number | null,
     high: number,
@@ -65,14 +76,63 @@ describe('R26, R27: the figure itself', () => {
     [
       'bases that nothing joins',
       someFacts('chloroquine', mg(10, 'base'), range(5, 10, 'salt')),
-      ['warning default-not-comparable'],
+      ['stop default-not-comparable'],
     ],
     [
-      'no line',
-      someFacts('praziquantel', mg(2), { order: { defaultRange: unknown() } }),
-      ['warning no-default-range'],
+      'no line at all',
+      someFacts('methylene-blue', mg(2), { order: { defaultRange: unknown() } }),
+      ['stop no-default-range'],
+    ],
+    [
+      'no line named: the highest counts',
+      someFacts('praziquantel', mg(10), unnamed),
+      ['warning line-not-named'],
+    ],
+    [
+      'no line named, above the highest',
+      someFacts('praziquantel', mg(11), unnamed),
+      ['warning over-default'],
+    ],
+    [
+      'no line named, far above the highest',
+      someFacts('praziquantel', mg(21), unnamed),
+      ['stop far-over-default'],
+    ],
+    [
+      'no line named, bases that nothing joins',
+      someFacts('praziquantel', mg(2, 'salt'), unnamed),
+      ['stop default-not-comparable'],
     ],
   ])('R26: %s', (_, facts, expected) => expect(firedBy('R26', facts)).toEqual(expected))
+  it.each<[string, CautionFacts, string[]]>([
+    ['ten times the highest line', someFacts('praziquantel', mg(100), unnamed), []],
+    ['beyond it', someFacts('praziquantel', mg(100.1), unnamed), ['stop beyond-every-line']],
+    [
+      'a thousand times, though the order names a line of its own',
+      someFacts('praziquantel', mg(2000), {
+        order: {
+          ...unnamed.order,
+          defaultRange: known({ low: null, high: 2000, unit: 'mg/L', basis: 'active' }),
+        },
+      }),
+      ['stop beyond-every-line'],
+    ],
+    ['another basis, four times as far', someFacts('praziquantel', mg(400, 'salt'), unnamed), []],
+    ['and beyond', someFacts('praziquantel', mg(401, 'salt'), unnamed), ['stop beyond-every-line']],
+    [
+      'copper as salt against a line of free copper: 7.86 mg/L is ten times 0.2 mg/L',
+      cuso(mg(7.9, 'salt'), 'marine', {
+        order: { agentRanges: known([{ low: 0.15, high: 0.2, unit: 'mg/L', basis: 'free' }]) },
+      }),
+      ['stop beyond-every-line'],
+    ],
+    ['no line at all is the matter of R26', someFacts('methylene-blue', mg(5000)), []],
+  ])('R47: %s', (_, facts, expected) => {
+    expect(firedBy('R47', facts)).toEqual(expected)
+    expect(firedBy('R47', facts, 'start')).toEqual(expected)
+    for (const caution of cautions(facts).filter(({ ruleId }) => ruleId === 'R47'))
+      expect(caution.overridable).toBe(false)
+  })
   it('R27: no basis is a stop that nobody overrides', () => {
     const without = someFacts('copper-sulfate', mg(0.2, null))
     expect(firedBy('R27', without)).toEqual(['stop basis-missing'])
@@ -129,6 +189,19 @@ describe('R28: spacing of doses, in true hours', () => {
   })
   it('an assay on day 8 asks for another dose; without a calendar interval nothing is early (reference case)', () => {
     expect(firedBy('R28', someFacts('praziquantel', mg(2)), 'start')).toEqual([])
+  })
+})
+
+describe('R01, R31: oxygen, whatever the bath', () => {
+  it.each(agentCodes)('%s waits for oxygen that was read and is high enough', (agent) => {
+    const bath = (oxygenMgPerL: CautionFacts['water']['oxygenMgPerL']) =>
+      someFacts(agent, mg(2), { water: { oxygenMgPerL } })
+    expect(firedBy('R01', bath(read(3.1)), 'start')).toEqual(['stop oxygen-low'])
+    expect(firedBy('R01', bath(unknown()), 'start')).toEqual(['stop oxygen-unknown'])
+    expect(firedBy('R31', bath(unknown()), 'start')).toEqual(['stop test-missing'])
+    expect(firedBy('R31', bath(read(7, 31)), 'start')).toEqual(['stop test-old'])
+    expect(firedBy('R01', bath(read(5)), 'start')).toEqual([])
+    expect(firedBy('R31', bath(read(5)), 'start')).toEqual([])
   })
 })
 

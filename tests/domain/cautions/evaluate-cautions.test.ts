@@ -131,7 +131,7 @@ describe('the answer', () => {
       plain(sayCaution(one, 'Europe/Lisbon').text),
     )
     expect(said.slice(0, 2)).toEqual([
-      'Oxygen is 4 mg/L. Formalin needs at least 5 mg/L.',
+      'Oxygen is 4 mg/L. A bath needs at least 5 mg/L.',
       '300 µL/L of product is above the 250 µL/L of the label for finfish.',
     ])
   })
@@ -141,7 +141,7 @@ describe('the answer', () => {
     })
     const told = evaluateCautions({ facts: precise, stage: 'start' }).cautions[0]
     expect(told && plain(sayCaution(told, 'Europe/Lisbon').text)).toBe(
-      'Oxygen is 4.80 mg/L. Formalin needs at least 5 mg/L.',
+      'Oxygen is 4.80 mg/L. A bath needs at least 5 mg/L.',
     )
   })
 })
@@ -186,8 +186,12 @@ describe('the list of rules', () => {
     expect(cautionRules.filter(({ when }) => when === 'start').map(({ id }) => id)).toEqual([...startRuleIds])
     for (const rule of cautionRules) expect(rule.condition !== undefined, rule.id).toBe(rule.when === 'start')
   })
-  it('says which can never be overridden: R08 and R27 of those built (treatments reference, section 4)', () => {
-    expect(cautionRules.filter(({ overridable }) => !overridable).map(({ id }) => id)).toEqual(['R08', 'R27'])
+  it('says which can never be overridden: R08 and R27 of those built (treatments reference, section 4), and R47 of ours', () => {
+    expect(cautionRules.filter(({ overridable }) => !overridable).map(({ id }) => id)).toEqual([
+      'R08',
+      'R27',
+      'R47',
+    ])
   })
   it('rests every rule and threshold on a known source, never with a better mark than the source has', () => {
     const rank = ['V', 'C', 'V2', 'M', 'P']

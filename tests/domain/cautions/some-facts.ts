@@ -61,6 +61,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
         unit: target.unit,
         basis: target.basis ?? 'active',
       }),
+      agentRanges: known([]),
       amountGrams: known(10),
       amountMillilitres: notApplicable(),
       amountShareOfPlan: known(1),

@@ -3,14 +3,18 @@ import { defineRule } from '../caution-rule.ts'
 import { isBelow } from '../exceeds.ts'
 import { freshReading } from '../fresh-reading.ts'
 
-/** Formalin takes oxygen out of water: none is dosed without a fresh reading at or above the floor. */
-export const formalinOxygen = defineRule({
+/**
+ * Animals in a bath breathe harder, and some agents take oxygen out of the water themselves: none is given without a
+ * fresh reading at or above the floor. The figure is the label's for formalin in ponds; that it holds for every bath is
+ * the project's own choice.
+ */
+export const oxygen = defineRule({
   id: 'R01',
   levels: ['stop'],
   when: 'start',
   overridable: true,
   parameters: {
-    oxygenFloorMgPerL: { default: 5, unit: 'mg/L', source: 'cfr-529-1030', mark: 'V', tighter: 'higher' },
+    oxygenFloorMgPerL: { default: 5, unit: 'mg/L', source: 'cfr-529-1030', mark: 'P', tighter: 'higher' },
     oxygenMaxAgeMinutes: { default: 30, unit: 'min', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.oxygenMgPerL'],
@@ -18,11 +22,11 @@ export const formalinOxygen = defineRule({
     { source: 'cfr-529-1030', mark: 'V' },
     { source: 'project-default', mark: 'P' },
   ],
-  concerns: ({ agent }) => agent === 'formalin',
+  concerns: () => true,
   judge(facts, { oxygenFloorMgPerL, oxygenMaxAgeMinutes }) {
     const floor = readingOf(oxygenFloorMgPerL, 'mg/L')
-    const oxygen = freshReading(facts.water.oxygenMgPerL, facts.at, oxygenMaxAgeMinutes)
-    if (oxygen.state === 'unknown')
+    const now = freshReading(facts.water.oxygenMgPerL, facts.at, oxygenMaxAgeMinutes)
+    if (now.state === 'unknown')
       return [
         {
           code: 'oxygen-unknown',
@@ -32,23 +36,23 @@ export const formalinOxygen = defineRule({
           unknown: ['water.oxygenMgPerL'],
         },
       ]
-    const reading = readingOf(oxygen.value, 'mg/L', oxygen.digits)
-    if (oxygen.state === 'old')
+    const reading = readingOf(now.value, 'mg/L', now.digits)
+    if (now.state === 'old')
       return [
         {
           code: 'oxygen-old',
           level: 'stop',
           params: {
             oxygen: reading,
-            readAt: oxygen.at,
-            ageMinutes: oxygen.ageMinutes,
+            readAt: now.at,
+            ageMinutes: now.ageMinutes,
             maxAgeMinutes: oxygenMaxAgeMinutes,
           },
           resolvedBy: ['read-oxygen'],
           unknown: ['water.oxygenMgPerL'],
         },
       ]
-    if (!isBelow(oxygen.value, oxygenFloorMgPerL)) return []
+    if (!isBelow(now.value, oxygenFloorMgPerL)) return []
     return [
       { code: 'oxygen-low', level: 'stop', params: { oxygen: reading, floor }, resolvedBy: ['raise-oxygen'] },
     ]

@@ -1,0 +1,188 @@
+import pg from 'pg'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { aTaxon, anAnimal } from '../builders/a-collection.ts'
+import type { BuiltEnclosure } from '../builders/a-water.ts'
+import {
+  aBathWater,
+  aDraft,
+  aProduct,
+  aSchool,
+  bathFields,
+  readingsNow,
+  shownCautions,
+  signDraft,
+} from '../builders/an-order.ts'
+import { textOf } from '../pdf/support/poppler.ts'
+import { newKey, password, startApi } from '../support/api.ts'
+import type { TestApi } from '../support/api.ts'
+
+let api: TestApi
+let owner: pg.Client
+let tank: BuiltEnclosure & { sumpId: string }
+let school: { id: string; accession: string }
+let prazi: { id: string; lotId: string }
+beforeAll(async () => {
+  api = await startApi()
+  owner = new pg.Client({ connectionString: api.ownerUrl })
+  await owner.connect()
+  tank = await aBathWater(api, 'QT-3')
+  school = await aSchool(api, tank.id, 1)
+  prazi = await aProduct(api, {})
+  await readingsNow(api, tank.waterBodyId, {
+    'dissolved-oxygen': ['6.9', 'mg/L'],
+    temperature: ['23.4', 'degC'],
+    salinity: ['33.1', 'PSS-78'],
+    ph: ['8.1', 'pH'],
+    alkalinity: ['2.4', 'meq/L'],
+  })
+})
+afterAll(async () => {
+  await owner.end()
+  await api.stop()
+})
+
+const praziFields = (given: object = {}) =>
+  bathFields({
+    enclosureId: tank.id,
+    animalIds: [school.id],
+    productId: prazi.id,
+    lotId: prazi.lotId,
+    ...given,
+  })
+const preview = async (fields: object) => {
+  const { agent } = await api.as('veterinarian')
+  return (await agent.post('/api/order-previews').send(fields).expect(200)).body
+}
+
+describe('what may be signed: an order', () => {
+  it('with a figure far beyond every dose line of the drug is signed by nobody, whether it names one or not', async () => {
+    const { lines } = (await (await api.as('veterinarian')).agent.get('/api/formulary').expect(200)).body
+    const short = lines.find((line: { use: string }) => line.use === 'flukes-short')
+    for (const doseLineId of [null, short.id]) {
+      const fields = praziFields({ target: { value: '2000', unit: 'mg/L' }, doseLineId })
+      const draft = await aDraft(api, fields)
+      const signed = await signDraft(api, draft, {
+        overrides: ['R26', 'R47'].map((ruleId) => ({ ruleId, reason: 'meant so' })),
+      })
+      expect(signed.body).toMatchObject({
+        code: 'caution-stops',
+        cautions: [{ ruleId: 'R47', code: 'beyond-every-line', overridable: false }],
+      })
+    }
+    // ten times the line that was meant: a stop, whether the line is named or left out
+    for (const doseLineId of [null, short.id])
+      expect(
+        (await preview(praziFields({ target: { value: '100', unit: 'mg/L' }, doseLineId }))).cautions,
+      ).toContainEqual(expect.objectContaining({ ruleId: 'R26', level: 'stop', overridable: true }))
+  })
+
+  it('refuses a dose line of another drug, and one that nobody confirmed', async () => {
+    const { agent } = await api.as('technician')
+    const { lines } = (await agent.get('/api/formulary').expect(200)).body
+    const lineOf = (use: string) => lines.find((line: { use: string }) => line.use === use)
+    const other = praziFields({ doseLineId: lineOf('sedation').id })
+    for (const send of [
+      agent.post('/api/orders').send({ id: api.nextId(), fields: other }),
+      agent.post('/api/order-previews').send(other),
+    ]) {
+      const refused = await send.expect(422)
+      expect(refused.body.code).toBe('dose-line-not-usable')
+      expect(refused.body.detail).toContain('tricaine')
+    }
+    const proposed = api.nextId()
+    await agent
+      .post('/api/dose-lines')
+      .send({
+        id: proposed,
+        supersedesId: lineOf('flukes-short').id,
+        low: null,
+        high: 2000,
+        longestContactMinutes: 60,
+        reason: 'read in an abstract',
+      })
+      .expect(201)
+    const refused = await agent
+      .post('/api/order-previews')
+      .send(praziFields({ doseLineId: proposed }))
+      .expect(422)
+    expect(refused.body.detail).toContain('waits to be confirmed')
+  })
+
+  it('takes answers only to cautions that stand, in the words that they stand in', async () => {
+    const draft = await aDraft(api, praziFields())
+    const { agent } = await api.as('veterinarian')
+    const shown = await shownCautions(api, draft.number)
+    const read = shown.map(({ ruleId, code, text }) => ({ ruleId, code, text }))
+    const sign = (more: object) =>
+      agent
+        .post(`/api/orders/${draft.number}/signature`)
+        .set('Idempotency-Key', newKey())
+        .send({ password, expectedVersion: draft.version, read, overrides: [], ...more })
+    // a reason kept for later: the lot is judged at the dose, and no veterinarian has seen it recalled
+    const ahead = {
+      ruleId: 'R34',
+      code: 'lot-recalled',
+      text: 'The lot was recalled.',
+      reason: 'just in case',
+    }
+    const early = await sign({ overrides: [ahead] })
+    expect(early.status).toBe(409)
+    expect(early.body).toMatchObject({ code: 'caution-not-fired', answers: [{ ruleId: 'R34' }] })
+    const [first, ...rest] = read
+    expect((await sign({ read: [{ ...first, text: 'Something milder.' }, ...rest] })).body.code).toBe(
+      'caution-not-fired',
+    )
+    const signed = await sign({})
+    expect(signed.status).toBe(201)
+    expect(signed.body.versions[0].content.read).toEqual(read)
+  })
+
+  it('takes a signed override for the finding and the facts that it was given for, and for nothing else', async () => {
+    const water = await aBathWater(api, 'QT-9')
+    const formalin = await aProduct(api, {
+      agent: 'formalin',
+      productName: 'Formalin 37 %',
+      form: 'liquid',
+      strength: { value: '37', unit: 'percent_w_w' },
+      density: { value: '1.08', unit: 'g/mL' },
+    })
+    const draft = await aDraft(
+      api,
+      bathFields({
+        enclosureId: water.id,
+        animalIds: [(await aSchool(api, water.id, 9)).id],
+        productId: formalin.id,
+        lotId: formalin.lotId,
+        target: { value: '260', unit: 'uL/L' },
+        basis: 'product',
+        timing: 'timed',
+        contactMinutes: 45,
+        division: { value: '1', unit: 'mL' },
+        startsAt: '2026-12-01T18:20:00Z',
+      }),
+    )
+    const reason = 'a resistant strain; watched through the whole bath'
+    const signed = await signDraft(api, draft, { overrides: [{ ruleId: 'R05', reason }] })
+    expect(signed.status).toBe(201)
+    const tech = await api.as('technician')
+    const sheetNow = async () => {
+      const { body } = await tech.agent.get(`/api/orders/${draft.number}/doses/1`).expect(200)
+      const ceiling = body.cautions.find((one: { ruleId: string }) => one.ruleId === 'R05')
+      return { ceiling, stops: body.why.filter((why: string) => why.startsWith(ceiling.title)).length }
+    }
+    expect(await sheetNow()).toMatchObject({
+      stops: 0,
+      ceiling: { level: 'stop', overridden: { by: 'Test veterinarian', reason } },
+    })
+    const print = await tech.agent.get(`/api/orders/${draft.number}/doses/1/print`).buffer(true).expect(200)
+    expect(textOf(print.body as Buffer)).toContain('Overridden by Test veterinarian')
+    // shrimp have come into the water since: the same rule, another ceiling, and nobody has answered that
+    const shrimp = await aTaxon(api, {
+      scientificName: 'Penaeus monodon',
+      commonName: 'Tiger prawn',
+      group: 'penaeid-shrimp',
+    })
+    await anAnimal(api, { taxonId: shrimp, enclosureId: water.id })
+    expect(await sheetNow()).toMatchObject({ stops: 1, ceiling: { level: 'stop', overridden: null } })
+  })
+})
