@@ -94,12 +94,12 @@ export const strikeMove = contract({
   id: 'strikeMove',
   method: 'post',
   path: '/animals/:accession/moves/:recordId/void',
-  action: 'animal.move',
+  action: 'move.strike',
   summary: 'Strike out a move that did not happen; it stays readable',
   params: recordParams,
   body: strikeBody,
   reply: { 200: Animal },
-  problems: ['not-found', 'contradicts-another-move', 'part-of-another-record'],
+  problems: ['not-found', 'may-not', 'contradicts-another-move', 'part-of-another-record'],
   idempotent: 'by-key',
 })
 
@@ -129,12 +129,12 @@ export const strikeDeath = contract({
   id: 'strikeDeath',
   method: 'post',
   path: '/animals/:accession/deaths/:recordId/void',
-  action: 'observation.record',
+  action: 'death.strike',
   summary: 'Strike out a death that was recorded by mistake; it stays readable',
   params: recordParams,
   body: strikeBody,
   reply: { 200: Animal },
-  problems: ['not-found', 'contradicts-another-move', 'count-too-small'],
+  problems: ['not-found', 'may-not', 'cause-signed', 'contradicts-another-move', 'count-too-small'],
   idempotent: 'by-key',
 })
 

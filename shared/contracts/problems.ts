@@ -62,6 +62,7 @@ export const problemStatus = {
   'taxa-differ': 409,
   'mark-already-carried': 409,
   'already-resolved': 409,
+  'cause-signed': 409,
   'later-records': 409,
   'name-already-used': 409,
   'already-voided': 409,

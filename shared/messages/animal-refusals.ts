@@ -53,6 +53,12 @@ export const animalRefusals = defineMessages({
     'This line was written with a transaction of the register. Strike out the transaction instead.',
   onlyMovesInside:
     'Arrivals and departures belong to the register. Only moves inside the house are struck out here.',
+  strikeOwnDeath:
+    'A death is struck out by whoever recorded it, on the same day, or by a veterinarian. Ask a veterinarian, or write an observation.',
+  strikeOwnMove:
+    'A move is struck out by whoever recorded it, on the same day, by a veterinarian, or by the registrar where no rule stood against it. Ask one of them.',
+  causeSigned: (p: { number: string }) =>
+    `A veterinarian signed the cause of this death in ${p.number}. A veterinarian strikes that signature out there first, with a reason; then the death.`,
   strikeContradicts: 'Without it a later move would no longer fit. Strike out the later move first.',
   resolveByHand:
     'This cannot be corrected by itself. Adjust the count or strike out the record, then choose “explained”.',

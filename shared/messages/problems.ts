@@ -72,6 +72,7 @@ export const problemTitles = defineMessages({
   'taxa-differ': 'The two are of different taxa',
   'mark-already-carried': 'Another animal carries this mark',
   'already-resolved': 'Somebody has explained this already',
+  'cause-signed': 'A veterinarian signed the cause of this death',
   'later-records': 'More is recorded since',
   'name-already-used': 'This name is on file already',
   'already-voided': 'This was already voided',

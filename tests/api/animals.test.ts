@@ -2,7 +2,8 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aGroup, anAnimal, aPlace, arrivalAt, aStingray } from '../builders/a-collection.ts'
 import type { TestPlace } from '../builders/a-collection.ts'
 import { newKey, startApi } from '../support/api.ts'
-import type { TestApi } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
+import { installation } from '../../server/platform/http/request-context.ts'
 
 let api: TestApi
 let taxonId: string
@@ -248,6 +249,81 @@ describe('moves', () => {
     const arrival = moves.body.rows.find((row: { kind: string }) => row.kind === 'arrival')
     expect((await strike(arrival.id)).body.code).toBe('part-of-another-record')
     expect(moves.body.rows.filter((row: { struck: unknown }) => row.struck)).toHaveLength(2)
+  })
+})
+
+describe('striking out', () => {
+  const strike = async (person: Promise<TestPerson> | TestPerson, url: string, what: string, id: string) =>
+    (await person).agent
+      .post(`${url}/${what}/${id}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'It was another tank' })
+  const happenedAt = monday
+
+  it('of a death is for whoever recorded it, on the same day, or for a veterinarian', async () => {
+    const school = await aGroup(api, { taxonId, enclosureId: kelp.id, count: 12 })
+    const { agent } = await api.as('keeper')
+    const record = async () => {
+      const id = api.nextId()
+      await agent
+        .post(`${school.url}/deaths`)
+        .send({ id, kind: 'found-dead', count: 1, happenedAt })
+        .expect(201)
+      return id
+    }
+    const [slip, late, other] = [await record(), await record(), await record()]
+    const refused = await strike(api.as('technician'), school.url, 'deaths', other)
+    expect([refused.status, refused.body.code]).toEqual([403, 'may-not'])
+    expect(refused.body.detail).toMatch(/veterinarian/)
+    expect((await strike(api.as('keeper'), school.url, 'deaths', slip)).status).toBe(200)
+    const today = api.clock.now()
+    api.clock.set(new Date(today.getTime() + 24 * 3600_000))
+    expect((await strike(api.as('keeper'), school.url, 'deaths', late)).status).toBe(403)
+    expect((await strike(api.as('veterinarian'), school.url, 'deaths', late)).status).toBe(200)
+    api.clock.set(today)
+    expect((await agent.get(school.url)).body.count.ledger).toBe(11)
+  })
+
+  it('of a move is for whoever recorded it, for a veterinarian, and for the registrar where it broke no rule', async () => {
+    const wing = await aPlace(api, { boundary: 'Striking wing' })
+    const ray = await anAnimal(api, { taxonId, enclosureId: wing.id })
+    await api.composition.parts.transactions.inTransaction(
+      { actor: installation, requestId: 'test' },
+      async (tx) => {
+        await api.composition.animals.service.lockMovement(tx, {
+          animalId: ray.id,
+          kind: 'boundary',
+          source: { kind: 'case', id: api.nextId(), label: 'Q-014' },
+          reason: 'in quarantine',
+          at: arrivalAt,
+        })
+      },
+    )
+    const transfer = api.nextId()
+    const vet = await api.as('veterinarian')
+    await vet.agent
+      .post(`${ray.url}/moves`)
+      .send({
+        id: transfer,
+        fromEnclosureId: wing.id,
+        toEnclosureId: river.id,
+        documentedTransfer: 'to the river gallery, same clock',
+        happenedAt,
+      })
+      .expect(201)
+    for (const role of ['technician', 'keeper', 'registrar'] as const)
+      expect((await strike(api.as(role), ray.url, 'moves', transfer)).body.code).toBe('may-not')
+    expect((await strike(vet, ray.url, 'moves', transfer)).status).toBe(200)
+
+    const free = await anAnimal(api, { taxonId, enclosureId: kelp.id })
+    const plain = api.nextId()
+    const { agent } = await api.as('keeper')
+    await agent
+      .post(`${free.url}/moves`)
+      .send({ id: plain, fromEnclosureId: kelp.id, toEnclosureId: river.id, happenedAt })
+      .expect(201)
+    expect((await strike(api.as('technician'), free.url, 'moves', plain)).status).toBe(403)
+    expect((await strike(api.as('registrar'), free.url, 'moves', plain)).status).toBe(200)
   })
 })
 

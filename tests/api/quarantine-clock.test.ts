@@ -134,6 +134,31 @@ describe('the clock of a case', () => {
     const codes = signed.body.reasons.map((reason: { code: string }) => reason.code)
     expect(codes).toContain('extended-death')
     expect(codes).toContain('death-explained')
+
+    // What a veterinarian signed a cause for is struck out by nobody before the signature is
+    const strike = (agent: typeof vet.agent) =>
+      agent
+        .post(`/api/animals/${one.animal.accession}/deaths/${death.id}/void`)
+        .set('Idempotency-Key', newKey())
+        .send({ reason: 'It was in another tank' })
+    for (const { agent } of [keeper, vet]) {
+      const refused = await strike(agent)
+      expect([refused.status, refused.body.code]).toEqual([409, 'cause-signed'])
+      expect(refused.body.detail).toContain(one.number)
+    }
+    const events = (await vet.agent.get(one.url)).body.events as { id: string; kind: string }[]
+    const signature = events.find(({ kind }) => kind === 'death-cause-signed')
+    await vet.agent
+      .post(`${one.url}/decisions`)
+      .send({
+        id: api.nextId(),
+        happenedAt: '2026-12-01T14:00:00Z',
+        reason: 'The body was from another tank',
+        decision: { kind: 'voided', voidsEventId: signature?.id },
+      })
+      .expect(201)
+    expect((await strike(vet.agent)).status).toBe(200)
+    expect((await vet.agent.get(one.url)).body).toMatchObject({ deaths: [], animals: { low: 8, high: 8 } })
   })
 
   it('stands still for true time of a fault, rounded up once', async () => {

@@ -11,6 +11,8 @@ import * as repository from './ledgers.repository.ts'
 import { subjectOf } from './moves.service.ts'
 import type { MoveParts, Moves } from './moves.service.ts'
 import { refuseField, sayInstant } from './refuse.ts'
+import { findCaseWithSignedCause } from './signed-causes.reads.ts'
+import { checkMayStrike } from './strikes.ts'
 import { insertResolution, openDiscrepancies } from './watch.repository.ts'
 
 export interface DeathsRequest {
@@ -149,6 +151,10 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
         const death = await repository.findDeath(tx, id)
         if (death?.animalId !== animal.id) throw new Problem('not-found')
         if (await repository.isStruck(tx, 'deathId', id)) return
+        await checkMayStrike(parts, tx, 'death.strike', death)
+        const number = await findCaseWithSignedCause(tx.manager, id)
+        if (number !== null)
+          throw new Problem('cause-signed', { detail: animalRefusals.causeSigned({ number }) })
         await repository.strike(tx, { id: parts.ids.next(), what: 'deathId', rowId: id, reason })
         if (death.countEntryId !== null)
           await repository.strike(tx, {

@@ -17,6 +17,7 @@ import { readLocks } from './chart.reads.ts'
 import type { Ledgers } from './ledgers.ts'
 import * as repository from './ledgers.repository.ts'
 import { refuseField, sayInstant } from './refuse.ts'
+import { checkMayStrike } from './strikes.ts'
 import { openDiscrepancies } from './watch.repository.ts'
 
 export interface MoveParts {
@@ -229,6 +230,9 @@ export function createMoves(parts: MoveParts) {
         if (move.kind !== 'move')
           throw new Problem('part-of-another-record', { detail: animalRefusals.onlyMovesInside })
         if (await repository.isStruck(tx, 'moveId', moveId)) return
+        await checkMayStrike(parts, tx, 'move.strike', move, {
+          'no-documented-transfer': move.documentedTransfer === null && move.againstRule === null,
+        })
         const without = (await repository.readLiveMoves(tx, animal.id)).filter((one) => one.moveId !== moveId)
         if (!listStays(without).ok)
           throw new Problem('contradicts-another-move', { detail: animalRefusals.strikeContradicts })

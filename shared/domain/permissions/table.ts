@@ -15,6 +15,8 @@ import type { Role } from './roles.ts'
  * - `open-only`            may open a case, not split it or change its protocol
  * - `inside-quarantine-boundary` the move stays inside one quarantine boundary, or the animal is cleared
  * - `named-role`           the discrepancy is for a role that the person holds
+ * - `own-record-of-the-day` the person recorded it, today by the days of the facility
+ * - `no-documented-transfer` the move is no veterinarian’s transfer across a quarantine boundary, and broke no rule
  * - `may-write-parent`     may write the record that the document belongs to
  * - `clinical-and-own` · `own-entries` · `clinical-text-withheld`  the part of the audit trail that is shown
  */
@@ -31,6 +33,8 @@ export type Condition =
   | 'open-only'
   | 'inside-quarantine-boundary'
   | 'named-role'
+  | 'own-record-of-the-day'
+  | 'no-documented-transfer'
   | 'may-write-parent'
   | 'clinical-and-own'
   | 'own-entries'
@@ -81,6 +85,7 @@ export const permissions = {
   'stock.controlled': row('yes', 'named-for-controlled-drugs', 'no', 'no', 'no'),
   'discharge.record': row('yes', 'yes', 'hygiene-only', 'no', 'no'),
   'observation.record': row('yes', 'yes', 'yes', 'no', 'no'),
+  'death.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
   'observation.flag': row('yes', 'yes', 'yes', 'yes', 'no'),
   'case.open': row('yes', 'yes', 'no', 'no', 'no'),
   'case.configure': row('yes', 'no', 'no', 'no', 'no'),
@@ -99,6 +104,7 @@ export const permissions = {
     'inside-quarantine-boundary',
     'no',
   ),
+  'move.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no-documented-transfer', 'no'),
   'discrepancy.resolve': row('named-role', 'no', 'no', 'named-role', 'no'),
   'history.export': row('yes', 'no', 'no', 'yes', 'no'),
   'formulary.propose': row('yes', 'yes', 'no', 'no', 'no'),

@@ -34,6 +34,7 @@ export function MovesPane({
   const data = query.data
   const [striking, setStriking] = useState<ToStrike | null>(null)
   const may = useMay('animal.move')
+  const mayStrike = useMay('move.strike')
   return (
     <section className="pane stack" aria-labelledby="places">
       <div className="row row-between">
@@ -50,7 +51,7 @@ export function MovesPane({
       {data ? (
         <DataTable
           label={words.moves}
-          columns={columnsOf({ zone, now, onStrike: may.allowed ? setStriking : undefined })}
+          columns={columnsOf({ zone, now, onStrike: mayStrike.allowed ? setStriking : undefined })}
           rows={data}
           rowKey={(row) => row.id}
           paging={{ kind: 'local', size: 8 }}
