@@ -69,7 +69,7 @@ export function compose(outside: Outside) {
   const enclosures = createEnclosures(parts)
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
-  const animals = createAnimals({ ...parts, facility: facility.service })
+  const animals = createAnimals({ ...parts, facility: facility.service, water })
   const documents = createDocuments(parts)
   const quarantine = createQuarantine({
     ...parts,

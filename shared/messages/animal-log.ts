@@ -47,6 +47,7 @@ export const animalLogWords = defineMessages({
 export const discrepancyNames = defineMessages({
   'more-than-counted': 'more than the ledger had.',
   'moved-under-lock': 'moved while it was held.',
+  'moved-before-lock': 'a move before a hold, entered after it.',
   'crossed-boundary': 'moved over its quarantine boundary.',
   'place-contradicted': 'gone at a time at which later moves have it elsewhere.',
   'identifier-twice': 'one mark read on two animals.',
@@ -59,13 +60,27 @@ export const outcomeNames = defineMessages({
   explained: 'as the reason says',
 } satisfies Record<DiscrepancyOutcome, string>)
 
+interface Facts {
+  said: (key: string) => string
+}
+
+/** "Moved from QT-1 to RP-2"; without an end where it came into the house or left it. */
+const moved = (p: Facts) =>
+  [
+    p.said('from') === '' && p.said('to') !== '' ? 'Came' : p.said('to') === '' ? 'Left the house' : 'Moved',
+    ...(p.said('from') === '' ? [] : [`from ${p.said('from')}`]),
+    ...(p.said('to') === '' ? [] : [`to ${p.said('to')}`]),
+  ].join(' ')
+/** The cases whose lock it was, where they are known. */
+const by = (p: Facts) => (p.said('by') === '' ? '' : ` (${p.said('by')})`)
+
 /** The whole story of a discrepancy, for whoever explains it. */
 export const discrepancySentences = defineMessages({
   'more-than-counted': (p) => `${p.said('seen')} were seen, ${p.said('posted')} were in the ledger.`,
-  'moved-under-lock': (p) =>
-    `Moved from ${p.said('from')} to ${p.said('to')} while it was held: ${p.said('reason')}`,
-  'crossed-boundary': (p) =>
-    `Moved from ${p.said('from')} to ${p.said('to')}, over its quarantine boundary: ${p.said('reason')}`,
+  'moved-under-lock': (p) => `${moved(p)} while it or the water was held${by(p)}: ${p.said('reason')}`,
+  'moved-before-lock': (p) =>
+    `${moved(p)}, before a hold began${by(p)}, but entered after it: ${p.said('reason')}`,
+  'crossed-boundary': (p) => `${moved(p)}, over the quarantine boundary${by(p)}: ${p.said('reason')}`,
   'place-contradicted': () =>
     'The last of it left at a time at which later moves still have it in an enclosure.',
   'identifier-twice': (p) => `${p.said('value')} was also read on ${p.said('other')}: ${p.said('reason')}`,
@@ -73,4 +88,4 @@ export const discrepancySentences = defineMessages({
     p.said('low') === p.said('high')
       ? `${p.said('low')} were counted, ${p.said('ledger')} are in the ledger.`
       : `${p.said('low')} to ${p.said('high')} were estimated, ${p.said('ledger')} are in the ledger.`,
-} satisfies Record<DiscrepancyKind, (p: { said: (key: string) => string }) => string>)
+} satisfies Record<DiscrepancyKind, (p: Facts) => string>)

@@ -20,6 +20,13 @@ export const animalRefusals = defineMessages({
   noSuchEnclosure: 'There is no such enclosure. Choose one from the list.',
   movementLocked: (p: { accession: string; by: string }) =>
     `${p.accession} is held: ${p.by}. A veterinarian lifts the hold. If it was moved all the same, record it as already happened, with the reason.`,
+  /** The name of an enclosure in place of that of an animal: "The water of QT-1". */
+  waterOf: (p: { code: string }) => `The water of ${p.code}`,
+  heldLater: (p: { accession: string; by: string }) =>
+    `${p.accession} is held now: ${p.by}. The hold began after the time that you give. If it was moved before, record it as already happened, with the reason.`,
+  arrivalHeld: (p: { code: string; by: string }) =>
+    `The water of ${p.code} is held: ${p.by}. Choose another enclosure. If they are in it already, enter the transaction as already done.`,
+  heldUnknown: 'nobody knew of the hold when it was moved',
   breachOpen: (p: { accession: string }) =>
     `${p.accession} was moved against a rule, and a veterinarian has not explained it yet. If it was moved again, record it as already happened, with the reason.`,
   documentedTransferNeeded: (p: { accession: string; by: string; from: string; to: string }) =>

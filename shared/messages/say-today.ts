@@ -66,6 +66,7 @@ const titles = defineMessages({
     beside(t.has('step') ? t.text('step') : 'Daily look', `${t.text('enclosure')} ${t.text('name')}`),
   care: (t: Told) => beside(t.text('step'), t.text('enclosure')),
   'discrepancy-registrar': (t: Told) => `Explain, ${t.text('accession')} ${t.text('animal')}`,
+  'movement-marked': (t: Told) => `Moved against a rule, ${t.text('accession')} ${t.text('animal')}`,
   'transaction-marks': (t: Told) => `${t.text('number')} goes beyond a permit`,
   'transaction-papers': (t: Told) =>
     t.has('count')
@@ -129,6 +130,7 @@ const notes = defineMessages({
   observation: (t: Told) => beside(t.text('case'), dayOf(t), lastLook(t)),
   care: sayStep,
   'discrepancy-registrar': sayDoesNotFit,
+  'movement-marked': (t: Told) => `${sayDoesNotFit(t)}. It waits for a veterinarian.`,
   'transaction-marks': sayTransaction,
   'transaction-papers': (t: Told) =>
     t.has('count') ? `The oldest: ${t.text('number')}, ${sayTransaction(t)}` : sayTransaction(t),

@@ -102,6 +102,7 @@ export const goWords = defineMessages({
   observation: 'Observe',
   care: 'Record it',
   'discrepancy-registrar': 'Explain',
+  'movement-marked': 'To the animal',
   'transaction-marks': 'Explain',
   'transaction-papers': 'Attach papers',
   'permit-marks': '',

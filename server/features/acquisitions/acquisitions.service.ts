@@ -194,6 +194,7 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
                 kind: given.kind,
                 enclosureId: line.enclosureId,
                 happenedAt: placed.at,
+                isFact: head.stage === 'already',
               }),
             )
             lines.push({

@@ -12,14 +12,14 @@ import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { Animal } from './animal.entity.ts'
 import * as animals from './animals.repository.ts'
-import { readLocks } from './chart.reads.ts'
 import { birthColumns } from './identify.service.ts'
 import type { Birth, Identify } from './identify.service.ts'
 import * as repository from './ledgers.repository.ts'
 import { subjectOf } from './moves.service.ts'
-import type { MoveParts, Moves } from './moves.service.ts'
+import type { JudgedMove, MoveParts, Moves } from './moves.service.ts'
 import { refuseField } from './refuse.ts'
 import { findTaxon } from './taxa.repository.ts'
+import { labelsOf, sayLocks } from './water-locks.ts'
 
 export interface Accession {
   /** Id of the new animal or group, made by whoever records it. */
@@ -45,6 +45,8 @@ export interface Accession {
     readTwiceReason?: string
   }[]
   happenedAt: string
+  /** It has happened: an arrival in held water is kept and marked instead of being refused. True unless told. */
+  isFact?: boolean
 }
 
 export interface CountChange {
@@ -61,12 +63,41 @@ export interface CountChange {
   source: { kind: string; id: string }
 }
 
-/** Losses that nobody decides on; a lock on movement does not speak of them. */
-const befalls = new Set<CountKind>(['death', 'euthanasia', 'escape', 'theft', 'lost-from-count'])
+/** What nobody decides on, or what does not come over the threshold: a lock on movement does not speak of it. */
+const befalls = new Set<CountKind>([
+  'death',
+  'euthanasia',
+  'escape',
+  'theft',
+  'lost-from-count',
+  'birth-or-hatch',
+  'propagation',
+])
 
 /** What the register and other features write of animals, inside a transaction of their own. */
 export function createAccession(parts: MoveParts & { moves: Moves; identify: Identify }) {
   const { facility, ledgers, moves } = parts
+
+  /** Locks against leaving the house, or against coming into a group that is here. */
+  async function locksOnThreshold(
+    tx: Tx,
+    animalId: string,
+    given: { enclosureId: string | null; leaves: boolean; at: Date },
+  ) {
+    const { enclosureId, leaves, at } = given
+    const bearing = await parts.waterLocks.bearingOn(tx, {
+      animalId,
+      fromId: leaves ? enclosureId : null,
+      toId: leaves ? null : enclosureId,
+      at,
+    })
+    const then = leaves
+      ? [...bearing.own, ...bearing.leaves]
+      : [...bearing.own, ...bearing.enters].filter(({ kind }) => kind === 'all')
+    return then.length > 0
+      ? { locks: then, breach: 'moved-under-lock' as const }
+      : { locks: bearing.later, breach: 'moved-before-lock' as const }
+  }
 
   return {
     /**
@@ -87,6 +118,20 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
       if (!(await findTaxon(tx, given.taxonId)))
         throw refuseField('not-found', '/taxonId', animalRefusals.noSuchTaxon)
       const enclosure = await moves.findTarget(tx, given.enclosureId, times.happenedAt, '/enclosureId')
+
+      const { enters } = await parts.waterLocks.bearingOn(tx, {
+        animalId: null,
+        fromId: null,
+        toId: enclosure.id,
+        at: times.happenedAt,
+      })
+      const held = befalls.has(given.kind) ? [] : enters.filter(({ kind }) => kind === 'all')
+      if (held.length > 0 && given.isFact === false)
+        throw refuseField(
+          'movement-locked',
+          '/enclosureId',
+          animalRefusals.arrivalHeld({ code: enclosure.code, by: sayLocks(held) }),
+        )
 
       const description = {
         taxonId: given.taxonId,
@@ -128,15 +173,19 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
           note: null,
           ...times,
         })
+      const arrivalId = parts.ids.next()
+      const judged: JudgedMove = {
+        reason: null,
+        documentedTransfer: null,
+        againstRule: held.length > 0 ? 'moved-under-lock' : null,
+      }
       await repository.insertMove(tx, {
-        id: parts.ids.next(),
+        id: arrivalId,
         animalId: animal.id,
         kind: 'arrival',
         fromEnclosureId: null,
         toEnclosureId: enclosure.id,
-        reason: null,
-        documentedTransfer: null,
-        againstRule: null,
+        ...judged,
         automatic: false,
         ...times,
       })
@@ -154,6 +203,14 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
           happenedAt: times.happenedAt.toISOString(),
         },
       })
+      await moves.noteBreach(
+        tx,
+        animal,
+        arrivalId,
+        { judged: { ...judged, reason: given.kind }, by: labelsOf(held) },
+        times,
+        { from: '', to: enclosure.code },
+      )
       for (const identifier of given.identifiers ?? [])
         await parts.identify.writeIdentifier(
           tx,
@@ -186,20 +243,18 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
         return { postedCount, excessCount: given.count - postedCount, created: false }
       }
       const leaves = countKinds[given.kind] === 'out'
-      const locks =
-        leaves && !befalls.has(given.kind) ? await readLocks(tx.manager, [animal.id], times.happenedAt) : []
       const enclosureId = await ledgers.placeAt(tx, animal.id, times.happenedAt)
-      if (!given.isFact) {
-        if (locks.length > 0)
-          throw new Problem('movement-locked', {
-            detail: animalRefusals.movementLocked({
-              accession: animal.accession,
-              by: locks
-                .map((lock) => animalRefusals.openRequest({ label: lock.source_label, reason: lock.reason }))
-                .join('; '),
-            }),
-          })
-      }
+      const code =
+        enclosureId === null
+          ? ''
+          : ((await animals.findEnclosures(tx, [enclosureId])).get(enclosureId)?.code ?? '')
+      const { locks, breach } = befalls.has(given.kind)
+        ? { locks: [], breach: 'moved-under-lock' as const }
+        : await locksOnThreshold(tx, animal.id, { enclosureId, leaves, at: times.happenedAt })
+      if (!given.isFact && locks.length > 0)
+        throw new Problem('movement-locked', {
+          detail: animalRefusals.movementLocked({ accession: animal.accession, by: sayLocks(locks) }),
+        })
       const posted = await ledgers.post(
         tx,
         animal,
@@ -248,14 +303,12 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
         })
       if (locks.length > 0)
         await ledgers.openDiscrepancy(tx, animal, {
-          kind: 'moved-under-lock',
+          kind: breach,
           source: given.source,
           facts: {
-            from:
-              enclosureId === null
-                ? ''
-                : ((await animals.findEnclosures(tx, [enclosureId])).get(enclosureId)?.code ?? ''),
-            to: '',
+            from: leaves ? code : '',
+            to: leaves ? '' : code,
+            by: labelsOf(locks),
             reason: given.kind,
           },
           times,

@@ -90,6 +90,33 @@ export async function insertIdentifierEnd(tx: Tx, row: IdentifierEnd): Promise<v
   await tx.manager.insert(IdentifierEnd, row)
 }
 
+/** The animals in some enclosures at an instant, but for one. */
+export async function findOthersIn(
+  tx: Tx,
+  enclosureIds: readonly string[],
+  given: { at: Date; but: string | null },
+): Promise<string[]> {
+  const rows: { animal_id: string }[] = await tx.manager.query(
+    `SELECT s.animal_id FROM stays s
+      WHERE s.enclosure_id = ANY ($1) AND s.during @> $2::timestamptz AND s.animal_id IS DISTINCT FROM $3`,
+    [enclosureIds, given.at, given.but],
+  )
+  return rows.map((row) => row.animal_id)
+}
+
+/** Whether an animal was cleared while it stood where it stands at an instant. */
+export async function wasClearedHere(tx: Tx, animalId: string, at: Date): Promise<boolean> {
+  const rows: unknown[] = await tx.manager.query(
+    `SELECT 1 FROM stays s
+       JOIN movement_locks k ON k.animal_id = s.animal_id AND k.kind = 'boundary'
+       JOIN movement_lock_lifts f ON f.lock_id = k.id
+      WHERE s.animal_id = $1 AND s.during @> $2::timestamptz AND f.happened_at >= lower(s.during)
+        AND f.happened_at <= $2`,
+    [animalId, at],
+  )
+  return rows.length > 0
+}
+
 export interface EnclosureRow {
   id: string
   code: string

@@ -9,7 +9,9 @@ import { createIdentify } from './identify.service.ts'
 import { createLedgers } from './ledgers.ts'
 import { createLocks } from './locks.service.ts'
 import { createMoves } from './moves.service.ts'
+import type { WaterQuestions } from '../water/index.ts'
 import { createTaxaService } from './taxa.service.ts'
+import { createWaterLocks } from './water-locks.ts'
 import { createWeights } from './weights.service.ts'
 
 /** Everything that can be done with animals: by people over the routes, and by other features in their transactions. */
@@ -17,9 +19,10 @@ export function createAnimalsService(parts: {
   transactions: Transactions
   ids: Ids
   facility: FacilityService
+  water: WaterQuestions
 }) {
-  const withLedgers = { ...parts, ledgers: createLedgers(parts) }
-  const locks = createLocks(parts)
+  const withLedgers = { ...parts, ledgers: createLedgers(parts), waterLocks: createWaterLocks(parts) }
+  const locks = createLocks(withLedgers)
   const moves = createMoves(withLedgers)
   const withMoves = { ...withLedgers, moves, locks }
   const identify = createIdentify(withMoves)

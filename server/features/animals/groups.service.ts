@@ -142,9 +142,10 @@ export function createGroups(parts: MoveParts & { moves: Moves; locks: LockServi
           })
         const to = await moves.findTarget(tx, given.toEnclosureId, times.happenedAt, '/toEnclosureId')
         const stays = from.id === to.id
-        const judged = stays
-          ? { reason: given.reason ?? null, documentedTransfer: null, againstRule: null }
+        const verdict = stays
+          ? { judged: { reason: given.reason ?? null, documentedTransfer: null, againstRule: null }, by: '' }
           : await moves.judge(tx, parent, { from, to, at: times.happenedAt }, given)
+        const { judged } = verdict
 
         const child = await foundBranch(tx, parent, given, times)
         const { reason } = judged
@@ -182,7 +183,7 @@ export function createGroups(parts: MoveParts & { moves: Moves; locks: LockServi
             facts: { seen: given.count, posted: available, excess: posted.excessCount, cause: 'split-out' },
             times,
           })
-        await moves.noteBreach(tx, child, moveId, judged, times, { from: from.code, to: to.code })
+        await moves.noteBreach(tx, child, moveId, verdict, times, { from: from.code, to: to.code })
         await ledgers.settlePlace(tx, parent, source)
       })
     },

@@ -1,4 +1,5 @@
 import type { Parts } from '../../platform/parts.ts'
+import type { Water } from '../water/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { Animal, AnimalDescription, Identifier, IdentifierEnd } from './animal.entity.ts'
 import {
@@ -49,7 +50,8 @@ export const animalEntities = [
   MovementLockLiftRow,
 ]
 
-export function createAnimals(parts: Parts & { facility: FacilityService }) {
+export function createAnimals(given: Parts & { facility: FacilityService; water: Water }) {
+  const parts = { ...given, water: given.water.questions }
   const service = createAnimalsService(parts)
   const queries = createAnimalQueries(parts)
   return {

@@ -1,7 +1,10 @@
+import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService, FactTimes } from '../facility/index.ts'
+import type { Ledgers } from './ledgers.ts'
+import { readLiveMoves } from './ledgers.repository.ts'
 import type { Animal } from './animal.entity.ts'
 import * as animals from './animals.repository.ts'
 import { readLocks } from './chart.reads.ts'
@@ -16,7 +19,7 @@ export interface LockSource {
 }
 
 /** Movement locks: quarantine writes them in its own transaction, moves are judged by them here. */
-export function createLocks(parts: { ids: Ids; facility: FacilityService }) {
+export function createLocks(parts: { ids: Ids; facility: FacilityService; ledgers: Ledgers }) {
   const subject = (animal: Animal) => ({ kind: 'animal', id: animal.id, label: animal.accession })
 
   async function write(
@@ -44,6 +47,33 @@ export function createLocks(parts: { ids: Ids; facility: FacilityService }) {
     return id
   }
 
+  /** A lock that comes to be known late: what moved under it meanwhile broke it, though nobody could know. */
+  async function markMovesSince(tx: Tx, animal: Animal, lock: { from: Date; label: string }): Promise<void> {
+    const moves = (await readLiveMoves(tx, animal.id)).filter(
+      (move) => !move.automatic && new Date(move.at) >= lock.from,
+    )
+    const places = await animals.findEnclosures(
+      tx,
+      moves.flatMap((move) => [move.fromEnclosureId, move.toEnclosureId].filter((id) => id !== null)),
+    )
+    const codeOf = (id: string | null) => (id === null ? '' : (places.get(id)?.code ?? ''))
+    for (const move of moves) {
+      if (await repository.isAskedAbout(tx, move.moveId)) continue
+      const times = await parts.facility.timesOf(tx, move.at)
+      await parts.ledgers.openDiscrepancy(tx, animal, {
+        kind: 'moved-under-lock',
+        source: { kind: 'move', id: move.moveId },
+        facts: {
+          from: codeOf(move.fromEnclosureId),
+          to: codeOf(move.toEnclosureId),
+          by: lock.label,
+          reason: animalRefusals.heldUnknown,
+        },
+        times,
+      })
+    }
+  }
+
   return {
     /**
      * Locks the movement of an animal from an instant on: `boundary` keeps it inside its quarantine boundary, `all`
@@ -56,7 +86,11 @@ export function createLocks(parts: { ids: Ids; facility: FacilityService }) {
     ): Promise<string> {
       const animal = (await animals.lockAnimals(tx, [given.animalId])).get(given.animalId)
       if (!animal) throw new Problem('not-found')
-      return write(tx, animal, given, await parts.facility.timesOf(tx, given.at))
+      const times = await parts.facility.timesOf(tx, given.at)
+      const id = await write(tx, animal, given, times)
+      if (given.kind === 'all')
+        await markMovesSince(tx, animal, { from: times.happenedAt, label: given.source.label })
+      return id
     },
 
     /** Lifts the locks of a source from an instant on, of all its animals or of one; already lifted ones stay so. */

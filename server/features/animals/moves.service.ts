@@ -1,3 +1,5 @@
+import { isMoveBreach } from '../../../shared/domain/animals/discrepancy.ts'
+import type { MoveBreach } from '../../../shared/domain/animals/discrepancy.ts'
 import { judgeMove } from '../../../shared/domain/animals/judge-move.ts'
 import { checkMove } from '../../../shared/domain/ledger/check-move.ts'
 import { listStays } from '../../../shared/domain/ledger/list-stays.ts'
@@ -13,18 +15,20 @@ import type { Animal } from './animal.entity.ts'
 import { MoveRow } from './animal-ledgers.entity.ts'
 import * as animals from './animals.repository.ts'
 import type { EnclosureRow } from './animals.repository.ts'
-import { readLocks } from './chart.reads.ts'
 import type { Ledgers } from './ledgers.ts'
 import * as repository from './ledgers.repository.ts'
 import { refuseField, sayInstant } from './refuse.ts'
 import { checkMayStrike } from './strikes.ts'
 import { openDiscrepancies } from './watch.repository.ts'
+import { labelsOf, sayLocks } from './water-locks.ts'
+import type { WaterLocks } from './water-locks.ts'
 
 export interface MoveParts {
   transactions: Transactions
   ids: Ids
   facility: FacilityService
   ledgers: Ledgers
+  waterLocks: WaterLocks
 }
 
 /** What a person says about a move beyond where and when. */
@@ -38,7 +42,13 @@ export interface MoveWords {
 export interface JudgedMove {
   reason: string | null
   documentedTransfer: string | null
-  againstRule: 'moved-under-lock' | 'crossed-boundary' | null
+  againstRule: MoveBreach | null
+}
+
+/** A judged move with the cases whose locks it met. */
+export interface MoveVerdict {
+  judged: JudgedMove
+  by: string
 }
 
 export const subjectOf = (animal: Pick<Animal, 'id' | 'accession'>) => ({
@@ -80,46 +90,72 @@ export function createMoves(parts: MoveParts) {
     animal: Animal,
     places: { from: EnclosureRow; to: EnclosureRow; at: Date },
     words: MoveWords,
-  ): Promise<JudgedMove> {
-    const locks = await readLocks(tx.manager, [animal.id], places.at)
-    const verdict = judgeMove(locks, places.from.boundary, places.to.boundary)
-    const breaches = (await openDiscrepancies(tx, animal.id)).filter(
-      ({ kind }) => kind === 'moved-under-lock' || kind === 'crossed-boundary',
-    )
-    const kept = (againstRule: JudgedMove['againstRule']): JudgedMove => ({
-      reason: words.alreadyHappened ?? words.reason ?? null,
-      documentedTransfer: null,
-      againstRule,
+  ): Promise<MoveVerdict> {
+    const { accession } = animal
+    const { own, leaves, enters, later } = await parts.waterLocks.bearingOn(tx, {
+      animalId: animal.id,
+      fromId: places.from.id,
+      toId: places.to.id,
+      at: places.at,
+    })
+    const verdict = judgeMove({ own, leaves, enters }, places.from.boundary, places.to.boundary)
+    const full = [...own, ...leaves, ...enters].filter(({ kind }) => kind === 'all')
+    const breaches = (await openDiscrepancies(tx, animal.id)).filter(({ kind }) => isMoveBreach(kind))
+    const by = labelsOf(verdict.may === 'no' ? full : later.length > 0 ? later : [...own, ...leaves])
+    const kept = (againstRule: JudgedMove['againstRule']): MoveVerdict => ({
+      judged: {
+        reason: words.alreadyHappened ?? words.reason ?? null,
+        documentedTransfer: null,
+        againstRule,
+      },
+      by,
     })
     if (verdict.may === 'no' || breaches.length > 0) {
       if (words.alreadyHappened !== undefined) return kept('moved-under-lock')
-      const by = locks.map((lock) =>
-        animalRefusals.openRequest({ label: lock.source_label, reason: lock.reason }),
-      )
+      const held = own.some(({ kind }) => kind === 'all') ? null : heldWater(places, leaves)
       throw new Problem('movement-locked', {
         detail:
           verdict.may === 'no'
-            ? animalRefusals.movementLocked({ accession: animal.accession, by: by.join('; ') })
-            : animalRefusals.breachOpen({ accession: animal.accession }),
+            ? animalRefusals.movementLocked({ accession: held ?? accession, by: sayLocks(full) })
+            : animalRefusals.breachOpen({ accession }),
+      })
+    }
+    if (later.length > 0) {
+      if (words.alreadyHappened !== undefined) return kept('moved-before-lock')
+      throw new Problem('movement-locked', {
+        detail: animalRefusals.heldLater({ accession, by: sayLocks(later) }),
       })
     }
     const mayMove = decide('animal.move', tx.actor.roles, {
       'inside-quarantine-boundary': verdict.may === 'yes',
     })
-    if (verdict.may === 'yes') return { ...kept(null), reason: words.reason ?? words.alreadyHappened ?? null }
-    if (mayMove.allowed && words.documentedTransfer !== undefined)
-      return { reason: words.reason ?? null, documentedTransfer: words.documentedTransfer, againstRule: null }
+    const { reason = null, documentedTransfer } = words
+    if (verdict.may === 'yes') {
+      const { judged } = kept(null)
+      return { judged: { ...judged, reason: reason ?? words.alreadyHappened ?? null }, by: '' }
+    }
+    if (mayMove.allowed && documentedTransfer !== undefined)
+      return { judged: { reason, documentedTransfer, againstRule: null }, by }
     if (words.alreadyHappened !== undefined) return kept('crossed-boundary')
     throw refuseField(
       'documented-transfer-needed',
       '/toEnclosureId',
       animalRefusals.documentedTransferNeeded({
-        accession: animal.accession,
-        by: locks.map((lock) => lock.source_label).join(', '),
+        accession,
+        by,
         from: places.from.code,
         to: places.to.code,
       }),
     )
+  }
+
+  /** Which water is held, for the sentence: the one it leaves, else the one it comes to. */
+  function heldWater(
+    places: { from: EnclosureRow; to: EnclosureRow },
+    leaves: readonly { kind: string }[],
+  ): string {
+    const { code } = leaves.some(({ kind }) => kind === 'all') ? places.from : places.to
+    return animalRefusals.waterOf({ code })
   }
 
   /** Opens the discrepancy of a move that broke a rule. */
@@ -127,7 +163,7 @@ export function createMoves(parts: MoveParts) {
     tx: Tx,
     animal: Animal,
     moveId: string,
-    judged: JudgedMove,
+    { judged, by }: MoveVerdict,
     times: FactTimes,
     codes: { from: string; to: string },
   ) {
@@ -135,7 +171,7 @@ export function createMoves(parts: MoveParts) {
     await ledgers.openDiscrepancy(tx, animal, {
       kind: judged.againstRule,
       source: { kind: 'move', id: moveId },
-      facts: { ...codes, reason: judged.reason ?? '' },
+      facts: { ...codes, by, reason: judged.reason ?? '' },
       times,
     })
   }
@@ -203,7 +239,8 @@ export function createMoves(parts: MoveParts) {
           recordedAt: tx.at.toISOString(),
         })
         if (!checked.ok) throw await refuseMisfit(tx, animal, checked.refusal, from, times.happenedAt)
-        const judged = await judge(tx, animal, { from, to, at: times.happenedAt }, given)
+        const verdict = await judge(tx, animal, { from, to, at: times.happenedAt }, given)
+        const { judged } = verdict
         await repository.insertMove(tx, { ...content, kind: 'move', automatic: false, ...judged, ...times })
         await ledgers.rebuildStays(tx, animal.id)
         tx.audit({
@@ -212,7 +249,7 @@ export function createMoves(parts: MoveParts) {
           before: { enclosure: from.code },
           after: { enclosure: to.code, happenedAt: times.happenedAt.toISOString(), ...judged },
         })
-        await noteBreach(tx, animal, id, judged, times, { from: from.code, to: to.code })
+        await noteBreach(tx, animal, id, verdict, times, { from: from.code, to: to.code })
       })
     },
 

@@ -26,6 +26,11 @@ export async function openDiscrepancies(
   )
 }
 
+/** Whether somebody was asked to explain a record before, explained since or not. */
+export function isAskedAbout(tx: Tx, sourceId: string): Promise<boolean> {
+  return tx.manager.existsBy(DiscrepancyRow, { sourceId })
+}
+
 export function isResolved(tx: Tx, discrepancyId: string): Promise<boolean> {
   return tx.manager.existsBy(DiscrepancyResolutionRow, { discrepancyId })
 }

@@ -1,16 +1,23 @@
 import type { Discrepancy } from '../../../shared/contracts/animals.contract.ts'
+import { isMoveBreach } from '../../../shared/domain/animals/discrepancy.ts'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { waiting } from './work.ts'
 import type { Moment } from './work.ts'
 
-/** Records that do not fit, each for whoever is named to explain it. */
+/**
+ * Records that do not fit, each for whoever is named to explain it. Of a move against a rule the registrar is told too:
+ * the places in the register rest on it.
+ */
 export function gatherDiscrepancies(discrepancies: readonly Discrepancy[], moment: Moment): TodayWork[] {
-  return discrepancies
-    .filter(({ forRole }) => moment.actor.roles.some((role) => role === forRole))
-    .map((one) =>
+  const { roles } = moment.actor
+  return discrepancies.flatMap((one) => {
+    const isNamed = roles.includes(one.forRole)
+    if (!isNamed && !(isMoveBreach(one.kind) && roles.includes('registrar'))) return []
+    const named = one.forRole === 'veterinarian' ? 'discrepancy-veterinarian' : 'discrepancy-registrar'
+    return [
       waiting({
         id: `discrepancy:${one.id}`,
-        kind: one.forRole === 'veterinarian' ? 'discrepancy-veterinarian' : 'discrepancy-registrar',
+        kind: isNamed ? named : 'movement-marked',
         at: one.happenedAt,
         params: {
           ...factParams(one.facts),
@@ -19,7 +26,8 @@ export function gatherDiscrepancies(discrepancies: readonly Discrepancy[], momen
           code: one.kind,
         },
       }),
-    )
+    ]
+  })
 }
 
 /** The figures of its sentence, kept apart from the names by a prefix. */

@@ -182,6 +182,12 @@ export function createWaterQuestions(parts: { dataSource: Db }) {
       const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
       return enclosure !== null && (await readConnectedWater(db, enclosure, at)) !== null
     },
+    /** The enclosures whose animals share the water of one at an instant, itself among them; itself alone on land. */
+    async enclosuresSharing(enclosureId: string, at: Date, db: Db = parts.dataSource): Promise<string[]> {
+      const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
+      const found = enclosure && (await readConnectedWater(db, enclosure, at))
+      return [...new Set([enclosureId, ...(found?.water.enclosureIds ?? [])])]
+    },
     /** Readings of one parameter in these bodies after `from` up to `until`, the newest first; void ones left out. */
     async recentReadings(
       waterBodyIds: readonly string[],

@@ -2,7 +2,8 @@
  * A recorded fact that does not fit the ledgers. It is kept as it was seen; somebody of a named role explains it.
  *
  * - `more-than-counted`   more animals died or left than the ledger had
- * - `moved-under-lock`    moved though a quarantine lock stood
+ * - `moved-under-lock`    moved though a quarantine lock stood on it or on the water
+ * - `moved-before-lock`   recorded while a quarantine lock stands, for a time before it began
  * - `crossed-boundary`    moved over a quarantine boundary before clearance, without a documented transfer
  * - `place-contradicted`  the last of it left at a time at which later moves still have it elsewhere
  * - `identifier-twice`    one mark read on two animals
@@ -11,11 +12,18 @@
 export const discrepancyKinds = {
   'more-than-counted': 'registrar',
   'moved-under-lock': 'veterinarian',
+  'moved-before-lock': 'veterinarian',
   'crossed-boundary': 'veterinarian',
   'place-contradicted': 'registrar',
   'identifier-twice': 'registrar',
   'count-differs': 'registrar',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
+
+/** Moves against a rule: until they are explained, the animal moves no further unasked. */
+export const moveBreaches = ['moved-under-lock', 'moved-before-lock', 'crossed-boundary'] as const
+export type MoveBreach = (typeof moveBreaches)[number]
+export const isMoveBreach = (kind: string): kind is MoveBreach =>
+  moveBreaches.some((breach) => breach === kind)
 
 export type DiscrepancyKind = keyof typeof discrepancyKinds
 export const discrepancyKindNames = Object.keys(discrepancyKinds) as [DiscrepancyKind, ...DiscrepancyKind[]]

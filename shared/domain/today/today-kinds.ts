@@ -41,6 +41,7 @@ export const todayKinds = {
   observation: { lane: 'watch', action: 'observation.record' },
   care: { lane: 'watch', action: 'observation.record' },
   'discrepancy-registrar': { lane: 'register', action: 'discrepancy.resolve', forRole: 'registrar' },
+  'movement-marked': { lane: 'register', action: 'register.manage' },
   'transaction-marks': { lane: 'register', action: 'register.manage' },
   'transaction-papers': { lane: 'register', action: 'register.manage' },
   'permit-marks': { lane: 'register', action: 'register.manage' },

@@ -2,7 +2,6 @@ import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
-import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
@@ -11,9 +10,9 @@ import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { EnclosureChooser, everyEnclosure } from '../enclosures/index.ts'
 import { animalName } from './animal-name.ts'
-import { judgeMoveTo } from './move-form-model.ts'
 import { missingAnswer, MoveRuleFields, noAnswer, sentAnswer } from './move-rule-fields.tsx'
 import { useMoveAnimal } from './mutations.ts'
+import { useMoveAsks } from './use-move-asks.ts'
 import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Moves the whole animal or group. A move that a rule forbids can still be recorded as having happened. */
@@ -22,28 +21,29 @@ export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => v
   const move = useMoveAnimal(animal.accession)
   const refusal = useRefusal()
   const toast = useToast()
-  const { roles } = useMe()
   const { data } = useQuery(everyEnclosure)
   const [id] = useState(newId)
   const [to, setTo] = useState<string | null>(null)
   const [reason, setReason] = useState('')
   const [answer, setAnswer] = useState(noAnswer)
   const target = data?.rows.find((row) => row.id === to)
-  const asks = judgeMoveTo(animal, target?.boundary, roles.includes('veterinarian'))
+  const { asks, isTold, heed } = useMoveAsks(animal, target)
   const { place } = animal
 
   const send = async () => {
     if (place === null || to === null || when.instant === null) return
     const happenedAt = when.instant
     const done = await refusal.attempt(() =>
-      move.mutateAsync({
-        id,
-        fromEnclosureId: place.id,
-        toEnclosureId: to,
-        reason: typedText(reason),
-        ...sentAnswer(asks, answer),
-        happenedAt,
-      }),
+      move
+        .mutateAsync({
+          id,
+          fromEnclosureId: place.id,
+          toEnclosureId: to,
+          reason: typedText(reason),
+          ...sentAnswer(asks, answer),
+          happenedAt,
+        })
+        .catch(heed),
     )
     if (!done) return
     toast({ words: words.moved({ animal: animalName(animal), to: target?.code ?? '' }) })
@@ -74,6 +74,7 @@ export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => v
         animal={animal}
         to={target?.code ?? ''}
         asks={asks}
+        isTold={isTold}
         answer={answer}
         onAnswer={setAnswer}
       />

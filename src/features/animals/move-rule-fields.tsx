@@ -34,6 +34,7 @@ export function MoveRuleFields({
   animal,
   to,
   asks,
+  isTold,
   answer,
   onAnswer,
 }: {
@@ -41,6 +42,8 @@ export function MoveRuleFields({
   /** Code of the enclosure it goes to. */
   to: string
   asks: MoveAsks
+  /** The server has said why; the reason is not said again. */
+  isTold: boolean
   answer: MoveRuleAnswer
   onAnswer: (next: MoveRuleAnswer) => void
 }) {
@@ -49,11 +52,13 @@ export function MoveRuleFields({
   const who = asks === 'documented-transfer' ? words.crossesVet : words.crossesOthers
   return (
     <>
-      <div role="status">
-        <FlagWords flag={held ? 'L' : 'Q'}>
-          {held ? words.heldNow : `${words.crossesBoundary({ to, from: animal.place?.code ?? '' })} ${who}`}
-        </FlagWords>
-      </div>
+      {isTold ? null : (
+        <div role="status">
+          <FlagWords flag={held ? 'L' : 'Q'}>
+            {held ? words.heldNow : `${words.crossesBoundary({ to, from: animal.place?.code ?? '' })} ${who}`}
+          </FlagWords>
+        </div>
+      )}
       {asks === 'documented-transfer' && !answer.happened ? (
         <TextareaField
           label={words.documented}

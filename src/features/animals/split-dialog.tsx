@@ -2,7 +2,6 @@ import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import type { Animal } from '../../../shared/contracts/animals.contract.ts'
 import { animalForms as words } from '../../../shared/messages/animal-forms.ts'
-import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
@@ -13,9 +12,9 @@ import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { EnclosureChooser, everyEnclosure } from '../enclosures/index.ts'
 import { animalName } from './animal-name.ts'
-import { judgeMoveTo } from './move-form-model.ts'
 import { missingAnswer, MoveRuleFields, noAnswer, sentAnswer } from './move-rule-fields.tsx'
 import { useSplitGroup } from './mutations.ts'
+import { useMoveAsks } from './use-move-asks.ts'
 import { RecordDialog, WhenField } from './record-dialog.tsx'
 
 /** Takes one animal, or part of a group, out under a number of its own. */
@@ -24,7 +23,6 @@ export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => 
   const split = useSplitGroup(animal.accession)
   const refusal = useRefusal()
   const toast = useToast()
-  const { roles } = useMe()
   const { data } = useQuery(everyEnclosure)
   const [id] = useState(newId)
   const [form, setForm] = useState<'individual' | 'group' | null>(null)
@@ -35,7 +33,8 @@ export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => 
   const [answer, setAnswer] = useState(noAnswer)
   const target = data?.rows.find((row) => row.id === to)
   const stays = to === animal.place?.id
-  const asks = stays ? 'nothing' : judgeMoveTo(animal, target?.boundary, roles.includes('veterinarian'))
+  const { isTold, heed, ...rule } = useMoveAsks(animal, target)
+  const asks = stays ? 'nothing' : rule.asks
   const count = form === 'individual' ? 1 : some
 
   const send = async () => {
@@ -43,16 +42,18 @@ export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => 
     const happenedAt = when.instant
     let accession = ''
     const done = await refusal.attempt(async () => {
-      const reply = await split.mutateAsync({
-        id,
-        form,
-        count,
-        toEnclosureId: to,
-        name: typedText(name),
-        reason: typedText(reason),
-        ...sentAnswer(asks, answer),
-        happenedAt,
-      })
+      const reply = await split
+        .mutateAsync({
+          id,
+          form,
+          count,
+          toEnclosureId: to,
+          name: typedText(name),
+          reason: typedText(reason),
+          ...sentAnswer(asks, answer),
+          happenedAt,
+        })
+        .catch(heed)
       accession = reply.into.accession
     })
     if (!done) return
@@ -108,6 +109,7 @@ export function SplitDialog({ animal, onBack }: { animal: Animal; onBack: () => 
         animal={animal}
         to={target?.code ?? ''}
         asks={asks}
+        isTold={isTold}
         answer={answer}
         onAnswer={setAnswer}
       />

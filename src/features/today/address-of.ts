@@ -34,6 +34,7 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   observation: (told) => paths.observe(told('enclosure')),
   care: toCase,
   'discrepancy-registrar': toAnimal,
+  'movement-marked': toAnimal,
   'transaction-marks': (told) => paths.transaction(told('number')),
   'transaction-papers': (told) =>
     told('count') === '' ? paths.transaction(told('number')) : paths.register(),

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { logEntries } from '../../../src/features/animals/animal-log.tsx'
 import { animalName, countText } from '../../../src/features/animals/animal-name.ts'
 import { sayLogLine } from '../../../src/features/animals/log-model.ts'
-import { judgeMoveTo } from '../../../src/features/animals/move-form-model.ts'
+import { asksAfter, judgeMoveTo } from '../../../src/features/animals/move-form-model.ts'
 import { missingAnswer, noAnswer, sentAnswer } from '../../../src/features/animals/move-rule-fields.tsx'
 import { sayDiscrepancy } from '../../../src/features/animals/say-discrepancy.ts'
 import { wholeNumber } from '../../../src/features/animals/whole-number.ts'
@@ -139,6 +139,14 @@ describe('a move, before it is sent', () => {
     expect(judgeMoveTo(ray, undefined, false)).toBe('nothing')
   })
 
+  it('asks after a refusal for what the server alone could know: locks on the water, and holds since', () => {
+    expect(asksAfter('nothing', undefined, true)).toBe('nothing')
+    expect(asksAfter('nothing', 'movement-locked', true)).toBe('happened-already')
+    expect(asksAfter('documented-transfer', 'movement-locked', true)).toBe('happened-already')
+    expect(asksAfter('nothing', 'documented-transfer-needed', true)).toBe('documented-transfer')
+    expect(asksAfter('nothing', 'documented-transfer-needed', false)).toBe('happened-already')
+  })
+
   it('is not sent before it has its answer, and sends only the answer that was asked', () => {
     expect(missingAnswer('nothing', noAnswer)).toBeUndefined()
     expect(missingAnswer('documented-transfer', noAnswer)).toBe('Say why first')
@@ -187,6 +195,13 @@ describe('figures and names', () => {
     )
     expect(sayDiscrepancy({ kind: 'count-differs', facts: { low: 97, high: 97, ledger: 100 } })).toBe(
       '97 were counted, 100 are in the ledger.',
+    )
+    const facts = { from: 'QT-3', to: 'RP-1', by: 'Q-014', reason: 'the pipe burst' }
+    expect(sayDiscrepancy({ kind: 'moved-under-lock', facts })).toBe(
+      'Moved from QT-3 to RP-1 while it or the water was held (Q-014): the pipe burst',
+    )
+    expect(sayDiscrepancy({ kind: 'moved-before-lock', facts: { ...facts, from: '' } })).toBe(
+      'Came to RP-1, before a hold began (Q-014), but entered after it: the pipe burst',
     )
   })
 })

@@ -7,13 +7,14 @@ import {
   taxonGroupNames,
 } from '../../../shared/domain/taxa/taxon-group.ts'
 
-const quarantined = [{ kind: 'boundary' }] as const
-const locked = [{ kind: 'boundary' }, { kind: 'all' }] as const
+const free = { own: [], leaves: [], enters: [] }
+const quarantined = { ...free, own: [{ kind: 'boundary' }] } as const
+const locked = { ...free, own: [{ kind: 'boundary' }, { kind: 'all' }] } as const
 
 describe('whether an animal may be moved', () => {
   it('freely when it was never in quarantine or has been cleared', () => {
-    expect(judgeMove([], null, 'Quarantine wing')).toEqual({ may: 'yes' })
-    expect(judgeMove([], 'Quarantine wing', null)).toEqual({ may: 'yes' })
+    expect(judgeMove(free, null, 'Quarantine wing')).toEqual({ may: 'yes' })
+    expect(judgeMove(free, 'Quarantine wing', null)).toEqual({ may: 'yes' })
   })
 
   it('inside its boundary while it is in quarantine, across it only as a documented transfer', () => {
@@ -28,6 +29,21 @@ describe('whether an animal may be moved', () => {
 
   it('not at all under a full lock, inside its boundary neither', () => {
     expect(judgeMove(locked, 'Quarantine wing', 'Quarantine wing')).toEqual({ may: 'no' })
+  })
+
+  it('out of the water of a case as if it were one of its animals, whatever it is itself', () => {
+    const out = { ...free, leaves: [{ kind: 'boundary' }] } as const
+    expect(judgeMove(out, 'Quarantine wing', null)).toEqual({ may: 'documented-transfer' })
+    expect(judgeMove(out, 'Quarantine wing', undefined)).toEqual({ may: 'documented-transfer' })
+    expect(judgeMove(out, 'Quarantine wing', 'Quarantine wing')).toEqual({ may: 'yes' })
+  })
+
+  it('into the water of a running case, but neither into nor out of water under a full lock', () => {
+    expect(judgeMove({ ...free, enters: [{ kind: 'boundary' }] }, null, 'Quarantine wing')).toEqual({
+      may: 'yes',
+    })
+    for (const side of ['leaves', 'enters'] as const)
+      expect(judgeMove({ ...free, [side]: [{ kind: 'all' }] }, 'Wing', 'Wing')).toEqual({ may: 'no' })
   })
 })
 
