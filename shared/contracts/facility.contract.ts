@@ -61,6 +61,6 @@ export const confirmSetting = contract({
   summary: 'Confirm a proposed value; it is in force from then on',
   params: z.strictObject({ key: SettingKeyName, proposalId: RecordId }),
   reply: { 200: Setting },
-  problems: ['not-found', 'already-confirmed'],
+  problems: ['not-found', 'already-confirmed', 'stale-version'],
   idempotent: 'by-key',
 })

@@ -30,4 +30,21 @@ export const settingRefusals = defineMessages({
   'not-a-choice': 'Choose one of the values offered.',
   'not-a-number': 'Type a number, for example 5.',
   'out-of-range': 'This number is outside what the setting allows.',
+  'no-running-number': 'Write zeros in braces once, where the running number belongs, for example HP-{0000}.',
+  'running-number-runs-on':
+    'Put a letter or a hyphen between the running number and other digits, or two animals could get numbers that read alike.',
+  'number-form-characters':
+    'Use letters without accents, digits, spaces and . / - beside the running number.',
+  'number-form-too-long': 'Make it at most 24 characters, so that it fits on a label.',
+  'on-call-parts': 'Write each person as name | telephone | e-mail, and put a comma before the next person.',
+  'on-call-name': 'Begin each entry with the name of a person or post.',
+  'on-call-way': 'Give each person a telephone number, an e-mail address or both, after a bar.',
+  'on-call-phone': 'The second part of an entry is a telephone number, for example +1 555 0100 or ext. 41.',
+  'on-call-email': 'The third part of an entry is an e-mail address, for example name@example.org.',
 } satisfies Record<SettingRefusal, string>)
+
+export const settingDetails = defineMessages({
+  newerProposed: (p: { value: string; by: string }) =>
+    `A newer value was proposed since: “${p.value}”${p.by === '' ? '' : ` by ${p.by}`}. Load the settings again and confirm that one, or propose yours anew.`,
+  inEntry: (p: { entry: string; says: string }) => `“${p.entry}”: ${p.says}`,
+})

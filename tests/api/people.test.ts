@@ -162,6 +162,46 @@ describe('people', () => {
   })
 })
 
+describe('settings of the facility', () => {
+  const propose = async (key: string, value: string) => {
+    const id = api.nextId()
+    const { agent } = await api.as('administrator')
+    return { id, reply: await agent.post(`/api/settings/${key}/proposals`).send({ id, value }) }
+  }
+  const confirm = async (key: string, id: string) => {
+    const { agent } = await api.as('administrator')
+    return agent.post(`/api/settings/${key}/proposals/${id}/confirmation`).set('Idempotency-Key', newKey())
+  }
+
+  it('takes no value that would stop work later, and says what to write', async () => {
+    const form = (await propose('numbers.accession', 'HP-')).reply
+    expect(form.status).toBe(422)
+    expect(form.body.errors).toEqual([
+      {
+        pointer: '/value',
+        code: 'no-running-number',
+        detail: expect.stringContaining('HP-{0000}') as string,
+      },
+    ])
+    const list = (await propose('notices.on-call', 'Duty desk | ext. 41, everybody')).reply
+    expect(list.status).toBe(422)
+    expect(list.body.detail).toMatch(/^“everybody”: Give each person a telephone number/)
+  })
+
+  it('confirms only the newest proposal, once', async () => {
+    const older = await propose('facility.name', 'Older Hall')
+    const newer = await propose('facility.name', 'Newer Hall')
+    const stale = await confirm('facility.name', older.id)
+    expect(stale.status).toBe(409)
+    expect(stale.body.code).toBe('stale-version')
+    expect(stale.body.detail).toContain('“Newer Hall” by Test administrator')
+    expect((await confirm('facility.name', newer.id)).body).toMatchObject({ value: 'Newer Hall' })
+    expect((await confirm('facility.name', older.id)).body.code).toBe('stale-version')
+    expect((await confirm('facility.name', newer.id)).body.code).toBe('already-confirmed')
+    await api.setSetting('facility.name', 'Harrow Point Sea Hall')
+  })
+})
+
 describe('licences', () => {
   const licence = (validFrom: string, validUntil: string) => ({
     id: api.nextId(),

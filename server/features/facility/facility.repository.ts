@@ -10,6 +10,14 @@ export async function insertConfirmation(tx: Tx, row: SettingConfirmation): Prom
   await tx.manager.insert(SettingConfirmation, row)
 }
 
+/** Advisory locks of this kind stand for a setting: its versions are a ledger without a row to lock. */
+const settingLocks = 4400_0005
+
+/** Puts everybody who proposes or confirms a value of the setting in one line until the transaction ends. */
+export async function lockSetting(tx: Tx, key: string): Promise<void> {
+  await tx.manager.query('SELECT pg_advisory_xact_lock($1, hashtext($2))', [settingLocks, key])
+}
+
 /** One human number after the other, never twice: the counter's row is locked until the transaction ends. */
 export async function takeNumber(tx: Tx, kind: string): Promise<number> {
   const [row]: [{ last_number: number }] = await tx.manager.query(

@@ -1,22 +1,26 @@
-import { checkSetting, itemsOf } from '../../../shared/domain/settings/check-setting.ts'
+import type { Refusal } from '../../../shared/domain/result.ts'
+import { checkSetting } from '../../../shared/domain/settings/check-setting.ts'
+import type { SettingRefusal } from '../../../shared/domain/settings/check-setting.ts'
+import { itemsOf } from '../../../shared/domain/settings/list-items.ts'
 import { settingKeys, settings } from '../../../shared/domain/settings/settings.ts'
 import type { SettingKey } from '../../../shared/domain/settings/settings.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
-import { settingNames, settingRefusals } from '../../../shared/messages/settings.ts'
+import { settingDetails, settingNames, settingRefusals } from '../../../shared/messages/settings.ts'
 import type { Setting } from '../../../shared/contracts/facility.contract.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import { presentSetting } from './facility.present.ts'
-import { insertConfirmation, insertSettingVersion, takeNumber } from './facility.repository.ts'
+import { insertConfirmation, insertSettingVersion, lockSetting, takeNumber } from './facility.repository.ts'
 import type { SettingRow } from './facility.reads.ts'
 
 export interface FacilityParts {
   transactions: Transactions
   ids: Ids
-  readVersions(key?: string): Promise<SettingRow[]>
+  readVersions(key?: string, tx?: Tx): Promise<SettingRow[]>
   readConfirmed(key: string, tx?: Tx): Promise<string | null>
 }
 
@@ -40,6 +44,13 @@ export interface FactTimes {
 /** Puts a running number into a form such as `HP-{0000}`. */
 export function formatNumber(form: string, number: number): string {
   return form.replace(/\{(0+)\}/, (_all, zeros: string) => String(number).padStart(zeros.length, '0'))
+}
+
+function refusedValue({ code, params }: Refusal<SettingRefusal>): Problem {
+  const says = settingRefusals[code]
+  const entry = params?.['entry']
+  const detail = entry === undefined ? says : settingDetails.inEntry({ entry: String(entry), says })
+  return refusedInput('/value', detail, code)
 }
 
 export function createFacilityService(parts: FacilityParts) {
@@ -68,13 +79,7 @@ export function createFacilityService(parts: FacilityParts) {
       given: { id: string; value: string; reason?: string },
     ) {
       const checked = checkSetting(settings[key], given.value)
-      if (!checked.ok)
-        throw new Problem('bad-input', {
-          errors: [
-            { pointer: '/value', detail: settingRefusals[checked.refusal.code], code: checked.refusal.code },
-          ],
-          detail: settingRefusals[checked.refusal.code],
-        })
+      if (!checked.ok) throw refusedValue(checked.refusal)
       await parts.transactions.inTransaction(context, async (tx) => {
         const row = {
           id: given.id,
@@ -84,6 +89,7 @@ export function createFacilityService(parts: FacilityParts) {
           proposedAt: tx.at,
           proposedBy: tx.actor.personId,
         }
+        await lockSetting(tx, key)
         const { created } = await insertSettingVersion(tx, row)
         if (created)
           tx.audit({
@@ -95,9 +101,20 @@ export function createFacilityService(parts: FacilityParts) {
       })
     },
     async confirmSetting(context: RequestContext, key: SettingKey, proposalId: string) {
-      const proposal = (await parts.readVersions(key)).find((row) => row.id === proposalId)
-      if (!proposal) throw new Problem('not-found')
       await parts.transactions.inTransaction(context, async (tx) => {
+        await lockSetting(tx, key)
+        const versions = await parts.readVersions(key, tx)
+        const proposal = versions.find((row) => row.id === proposalId)
+        if (!proposal) throw new Problem('not-found')
+        if (proposal.confirmed_at !== null) throw new Problem('already-confirmed')
+        const [newest] = versions
+        if (newest && newest.id !== proposalId)
+          throw new Problem('stale-version', {
+            detail: settingDetails.newerProposed({ value: newest.value, by: newest.proposed_by_name ?? '' }),
+          })
+        // proposed before the rules of this version
+        const checked = checkSetting(settings[key], proposal.value)
+        if (!checked.ok) throw refusedValue(checked.refusal)
         const before = await valueOf(key, tx)
         await insertConfirmation(tx, {
           id: parts.ids.next(),

@@ -10,7 +10,7 @@ export const facilityEntities = [SettingVersion, SettingConfirmation]
 export function createFacility(parts: Parts) {
   const service = createFacilityService({
     ...parts,
-    readVersions: (key) => readSettingVersions(parts.dataSource, key),
+    readVersions: (key, tx) => readSettingVersions(tx?.manager ?? parts.dataSource, key),
     readConfirmed: (key, tx) => readConfirmedValue(tx?.manager ?? parts.dataSource, key),
   })
   return { service, routes: facilityRoutes(service) }

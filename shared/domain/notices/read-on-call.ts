@@ -1,4 +1,4 @@
-import { itemsOf } from '../settings/check-setting.ts'
+import { itemsOf } from '../settings/list-items.ts'
 
 /** Somebody who is called when something is urgent. */
 export interface OnCall {

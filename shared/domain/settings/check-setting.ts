@@ -1,8 +1,21 @@
+import { checkOnCall } from '../notices/check-on-call.ts'
+import type { OnCallRefusal } from '../notices/check-on-call.ts'
 import { ok, refuse } from '../result.ts'
 import type { Result } from '../result.ts'
+import { itemsOf, tidyList } from './list-items.ts'
 import type { SettingDefinition } from './settings.ts'
 
-export type SettingRefusal = 'empty' | 'unknown-zone' | 'not-a-choice' | 'not-a-number' | 'out-of-range'
+export type SettingRefusal =
+  | 'empty'
+  | 'unknown-zone'
+  | 'not-a-choice'
+  | 'not-a-number'
+  | 'out-of-range'
+  | 'no-running-number'
+  | 'running-number-runs-on'
+  | 'number-form-characters'
+  | 'number-form-too-long'
+  | OnCallRefusal
 
 function isZone(text: string): boolean {
   try {
@@ -13,20 +26,40 @@ function isZone(text: string): boolean {
   }
 }
 
+const longestForm = 24
+
+/**
+ * Whether numbers made by a form can be told apart, written on a label and typed again. A digit beside the running number
+ * would make two different numbers read alike: `A1{0}` and `A{00}` both give A12.
+ */
+function checkNumberForm(form: string): Result<string, SettingRefusal> {
+  if (form === '') return refuse('empty', 'value')
+  if (form.split(/\{0+\}/).length !== 2) return refuse('no-running-number', 'value')
+  const [before = '', after = ''] = form.split(/\{0+\}/)
+  // what is typed into a search or an address, and printed in any face
+  if (!/^[A-Za-z0-9./ -]*$/.test(before + after)) return refuse('number-form-characters', 'value')
+  if (/\d$/.test(before) || /^\d/.test(after)) return refuse('running-number-runs-on', 'value')
+  return form.length <= longestForm ? ok(form) : refuse('number-form-too-long', 'value')
+}
+
 /**
  * Whether a text can be the value of a setting.
  *
  * @param text as typed; a list is separated by commas and may be empty
  * @returns the tidied value
- * @refuses empty | unknown-zone | not-a-choice | not-a-number | out-of-range
+ * @refuses a SettingRefusal, with what is wrong and, of a list, which entry
  */
 export function checkSetting(definition: SettingDefinition, text: string): Result<string, SettingRefusal> {
   const value = text.trim()
   switch (definition.kind) {
-    case 'list': {
-      const items = value.split(',').map((item) => item.trim())
-      return ok(items.filter((item) => item !== '').join(', '))
+    case 'list':
+      return ok(tidyList(value))
+    case 'on-call': {
+      const list = tidyList(value)
+      return checkOnCall(itemsOf(list)) ?? ok(list)
     }
+    case 'number-form':
+      return checkNumberForm(value)
     case 'text':
       return value === '' ? refuse('empty', 'value') : ok(value)
     case 'zone':
@@ -43,9 +76,4 @@ export function checkSetting(definition: SettingDefinition, text: string): Resul
         : refuse('out-of-range', 'value', { min: String(low), max: String(high) })
     }
   }
-}
-
-/** The items of a list setting. */
-export function itemsOf(value: string): string[] {
-  return value === '' ? [] : value.split(',').map((item) => item.trim())
 }

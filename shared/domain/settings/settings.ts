@@ -4,7 +4,7 @@ import type { SourceKey } from '../sources.ts'
 /** What one setting means, what it is until somebody confirms another value, and who may confirm it. */
 export interface SettingDefinition {
   default: string
-  kind: 'text' | 'zone' | 'choice' | 'list' | 'number'
+  kind: 'text' | 'zone' | 'choice' | 'list' | 'number' | 'number-form' | 'on-call'
   choices?: readonly string[]
   /** Bounds of a number, in the unit named by the key. */
   min?: number
@@ -47,11 +47,16 @@ export const settings = {
   },
   'numbers.accession': {
     default: 'A-{0000}',
-    kind: 'text',
+    kind: 'number-form',
     confirm: 'facility.manage',
     source: 'project-default',
   },
-  'notices.on-call': { default: '', kind: 'list', confirm: 'facility.manage', source: 'project-default' },
+  'notices.on-call': {
+    default: '',
+    kind: 'on-call',
+    confirm: 'facility.manage',
+    source: 'project-default',
+  },
 } as const satisfies Record<string, SettingDefinition>
 
 export type SettingKey = keyof typeof settings
