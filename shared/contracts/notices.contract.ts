@@ -21,6 +21,7 @@ export const Notice = z.object({
   words: z.string().describe('What was seen'),
   raisedAt: Instant.describe('When it was raised'),
   raisedBy: z.string().describe('Who raised it'),
+  raisedById: RecordId.nullable().describe('Id of that person, who cannot also mark it seen'),
   state: NoticeState,
   sentTo: z
     .array(z.object({ name: z.string().describe('Whom'), at: Instant.describe('When') }))
@@ -90,12 +91,12 @@ export const listNotices = contract({
 
 export const noteSeen = contract({
   ...actAddresses.noteSeen,
-  action: 'observation.flag',
-  summary: 'I have seen this urgent call and see to it',
+  action: 'notice.see',
+  summary: 'I have seen this urgent call, which another person raised, and see to it',
   params,
   body: z.strictObject({ id: RecordId }),
   reply: { 201: Notice },
-  problems: ['not-found', 'id-already-used'],
+  problems: ['not-found', 'id-already-used', 'another-person-needed'],
 })
 
 export const noteTelephoned = contract({

@@ -50,6 +50,8 @@ export const observationRefusals = defineMessages({
 
 /** Refusals of observations that are not about their content. */
 export const observationDetails = defineMessages({
+  seenByAnother:
+    'Whoever raised an urgent call has seen it already. Another veterinarian or technician has to say so; telephone if nobody does.',
   flagOnly:
     'You may flag something you saw, in words. A round is recorded by keepers, technicians and veterinarians.',
   noSuchEnclosure: 'There is no such enclosure.',

@@ -93,10 +93,41 @@ describe('an urgent call', () => {
     const open = await agent.get('/api/notices').expect(200)
     expect(open.body.rows.map(({ id }: { id: string }) => id)).toContain(noticeId)
 
+    // whoever raised it has not been told of it by anybody; neither does another keeper answer it
+    expect((await agent.post(`/api/notices/${noticeId}/seen`).send({ id: api.nextId() })).body.code).toBe(
+      'may-not',
+    )
     const vet = await api.as('veterinarian')
     const seen = await vet.agent.post(`/api/notices/${noticeId}/seen`).send({ id: api.nextId() }).expect(201)
     expect(seen.body).toMatchObject({ state: 'seen', seen: [{ by: 'Test veterinarian' }] })
     expect((await agent.get('/api/notices')).body.rows).toEqual([])
+  })
+
+  it('is seen by another person than whoever raised it', async () => {
+    const one = await aCase(api)
+    const vet = await api.as('veterinarian')
+    const noticeId = api.nextId()
+    await vet.agent
+      .post('/api/observations')
+      .send(anObservation(api, one.enclosure.code, { noticeId, urgent: true, words: 'Gasping.' }))
+      .expect(201)
+    const see = (agent: typeof vet.agent) =>
+      agent.post(`/api/notices/${noticeId}/seen`).send({ id: api.nextId() })
+    const own = await see(vet.agent)
+    expect(own.status).toBe(403)
+    expect(own.body.code).toBe('another-person-needed')
+    expect(own.body.detail).toMatch(/Another veterinarian or technician/)
+    const acts = async (agent: typeof vet.agent) =>
+      (await agent.get('/api/today').expect(200)).body.items.find(
+        ({ id }: { id: string }) => id === `urgent-call:${noticeId}`,
+      ).acts
+    const technician = await api.as('technician')
+    expect(await acts(vet.agent)).toEqual([])
+    expect(await acts(technician.agent)).toEqual(['mark-seen'])
+    expect((await see(technician.agent).expect(201)).body).toMatchObject({
+      state: 'seen',
+      seen: [{ by: 'Test technician' }],
+    })
   })
 
   it('reaches nobody, and says so, when nobody with an address is on the list', async () => {
@@ -121,6 +152,8 @@ describe('an urgent call', () => {
       .send(anObservation(api, 'NOWHERE', { noticeId, urgent: true, words: 'help' }))
     expect(reply.status).toBe(422)
     expect((await agent.get(`/api/notices/${noticeId}`)).status).toBe(404)
-    expect((await agent.post(`/api/notices/${noticeId}/seen`).send({ id: api.nextId() })).status).toBe(404)
+    const vet = await api.as('veterinarian')
+    const nothing = await vet.agent.post(`/api/notices/${noticeId}/seen`).send({ id: api.nextId() })
+    expect(nothing.status).toBe(404)
   })
 })

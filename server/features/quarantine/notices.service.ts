@@ -1,5 +1,7 @@
 import { readOnCall } from '../../../shared/domain/notices/read-on-call.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { noticeLetter } from '../../../shared/messages/notices.ts'
+import { observationDetails } from '../../../shared/messages/quarantine-refusals.ts'
 import { sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
@@ -88,6 +90,10 @@ export function createNoticesService(parts: {
     await transactions.inTransaction(context, async (tx) => {
       const notice = await repository.findNotice(tx, noticeId)
       if (!notice) throw new Problem('not-found')
+      const { personId, roles } = tx.actor
+      const another = personId !== notice.recordedBy
+      if (given.kind === 'seen' && !decide('notice.see', roles, { 'another-person': another }).allowed)
+        throw new Problem('another-person-needed', { detail: observationDetails.seenByAnother })
       const said = given.happenedAt === null ? tx.at : new Date(given.happenedAt)
       // A telephone call may have waited on a phone without a signal, whose clock may be wrong
       const happenedAt = said.getTime() > tx.at.getTime() + allowedAheadMs ? tx.at : said

@@ -70,6 +70,7 @@ export function presentNotice(row: NoticeReadRow): Notice {
     words: row.words,
     raisedAt: row.happened_at.toISOString(),
     raisedBy: row.recorded_by_name ?? '',
+    raisedById: row.recorded_by,
     state: noticeState({ seen: acts('seen').length, sent: sent.length, failed: failed.size }),
     sentTo: sent.map(({ name, at }) => ({ name, at: iso(at) })),
     failed: [...failed.values()].map(({ name, at, error }) => ({ name, at: iso(at), error: error ?? '' })),

@@ -6,6 +6,7 @@ import type {
   Skin,
 } from '../../../shared/domain/observations/observation.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { seenByAnother } from './notices.reads.ts'
 
 export interface ObservationReadRow {
   id: string
@@ -64,7 +65,8 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
             o.signs, o.words, o.count_basis, o.count_low, o.count_high, o.found_dead, o.unassigned_dead,
             o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,
             r.words AS reviewed_words, v.reason AS voided_reason, n.id AS notice_id,
-            (SELECT count(*)::int FROM notice_acts a WHERE a.notice_id = n.id AND a.kind = 'seen') AS notice_seen,
+            (SELECT count(*)::int FROM notice_acts a WHERE a.notice_id = n.id AND a.kind = 'seen'
+                AND ${seenByAnother('a')}) AS notice_seen,
             (SELECT count(*)::int FROM notice_deliveries d
               WHERE d.notice_id = n.id AND d.outcome = 'sent') AS notice_sent,
             (SELECT count(*)::int FROM notice_deliveries d

@@ -7,7 +7,6 @@ import type { Moment } from './work.ts'
 
 /** Urgent calls that nobody has seen: for everybody who may answer one. They are late from the moment they are raised. */
 export function gatherNotices(notices: readonly Notice[], moment: Moment): TodayWork[] {
-  const maySee = decide('observation.flag', moment.actor.roles).allowed
   return notices.map((notice) =>
     work({
       id: `urgent-call:${notice.id}`,
@@ -23,7 +22,11 @@ export function gatherNotices(notices: readonly Notice[], moment: Moment): Today
         fate: notice.state,
         ...(notice.caseNumber === null ? {} : { case: notice.caseNumber }),
       },
-      acts: maySee ? ['mark-seen'] : [],
+      acts: decide('notice.see', moment.actor.roles, {
+        'another-person': notice.raisedById !== moment.actor.personId,
+      }).allowed
+        ? ['mark-seen']
+        : [],
     }),
   )
 }

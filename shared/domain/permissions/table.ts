@@ -86,6 +86,7 @@ export const permissions = {
   'discharge.record': row('yes', 'yes', 'hygiene-only', 'no', 'no'),
   'observation.record': row('yes', 'yes', 'yes', 'no', 'no'),
   'death.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
+  'notice.see': row('another-person', 'another-person', 'no', 'no', 'no'),
   'observation.flag': row('yes', 'yes', 'yes', 'yes', 'no'),
   'case.open': row('yes', 'yes', 'no', 'no', 'no'),
   'case.configure': row('yes', 'no', 'no', 'no', 'no'),

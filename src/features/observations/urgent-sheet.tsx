@@ -7,6 +7,7 @@ import type { Notice } from '../../../shared/contracts/notices.contract.ts'
 import { observationWords as words } from '../../../shared/messages/observation-screens.ts'
 import { sayObservation } from '../../../shared/messages/observations.ts'
 import { api } from '../../lib/api-client.ts'
+import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
@@ -36,6 +37,7 @@ const buzzMs = 200
 export function UrgentSheet({ id }: { id: string }) {
   const me = useMe()
   const { zone } = me.facility
+  const maySee = useMay('notice.see').allowed
   const client = useQueryClient()
   const { waiting, refused, downSince } = useOutbox()
   const own = [...waiting, ...refused]
@@ -141,7 +143,7 @@ export function UrgentSheet({ id }: { id: string }) {
             {words.haveTelephoned}
           </Button>
         )}
-        {notice && fate !== 'seen' && notice.raisedBy !== me.printedName ? (
+        {notice && fate !== 'seen' && maySee && notice.raisedById !== me.id ? (
           <Button size="touch" block disabled={seen.isPending} onClick={() => seen.mutate()}>
             {words.haveSeen}
           </Button>
