@@ -18,9 +18,12 @@ const paintAfterTheme: Plugin = {
   },
 }
 
-/** Sheets that must open where there is no signal, with the frames around them. */
+/**
+ * Sheets that must open where there is no signal, with the frames around them: what is written at a tank, and what is
+ * read there. Any other sheet is kept from when it is first opened.
+ */
 const withoutSignal =
-  /\/src\/app\/(shell\/(frame|hand-frame)|routes\/quarantine\/(rounds|observe|urgent|unsent))\.tsx$/
+  /\/src\/app\/(shell\/(frame|hand-frame)|routes\/(today|water|enclosure|animals|animal|quarantine\/(board|case|rounds|observe|urgent|unsent)|orders\/(orders|order|sheet)))\.tsx$/
 
 /** Writes the service worker with the list of files that those sheets are built of; the version is made of their names. */
 const serviceWorker: Plugin = {
@@ -36,6 +39,8 @@ const serviceWorker: Plugin = {
         wanted.add(fileName)
         for (const css of file.viteMetadata?.importedCss ?? []) wanted.add(css)
         file.imports.forEach(take)
+        // what a sheet loads only when it is asked for; the first script would lead to every sheet there is
+        if (!file.isEntry) file.dynamicImports.forEach(take)
       }
       for (const file of Object.values(bundle)) {
         if (file.type === 'asset' && /roboto-flex-latin-(wdth|400)-normal[^/]*\.woff2$/.test(file.fileName))

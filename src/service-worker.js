@@ -38,5 +38,18 @@ self.addEventListener('fetch', (event) => {
   }
   // names of assets change with their content, so what is kept is right
   if (url.pathname.startsWith('/assets/'))
-    event.respondWith(caches.match(request, { cacheName }).then((kept) => kept ?? fetch(request)))
+    event.respondWith(caches.match(request, { cacheName }).then((kept) => kept ?? fetchAndKeep(request)))
 })
+
+/** A sheet that was opened once opens again without a signal. */
+async function fetchAndKeep(request) {
+  const answer = await fetch(request)
+  if (answer.ok) {
+    const copy = answer.clone()
+    caches
+      .open(cacheName)
+      .then((cache) => cache.put(request, copy))
+      .catch(() => undefined)
+  }
+  return answer
+}

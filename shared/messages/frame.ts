@@ -56,6 +56,13 @@ export const frameWords = defineMessages({
   loadAgain: 'Load again',
   unreachable: 'The server can’t be reached',
   unreachableBody: 'Nobody can be signed in or out until it answers.',
+  sheetNotHere: 'No signal, and this sheet is not kept on this device',
+  sheetNotHereBody:
+    'It opens when there is a signal again. The round, observations and urgent calls open without one; what is entered there is kept on this device and sent later.',
+  toRounds: 'Go to the round',
+  notLoaded: 'This sheet could not be loaded',
+  notLoadedBody:
+    'The server answers, but a part of the sheet did not come. What was saved is safe. Load it again.',
   newVersion: 'A new version is in place',
   newVersionBody: 'Load the page again to go on with it. What was saved is safe.',
 })

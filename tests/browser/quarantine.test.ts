@@ -58,6 +58,7 @@ async function signedIn(role: string, size: typeof desk, to: string): Promise<Pa
     ...size,
     expectedErrors: [
       /ERR_INTERNET_DISCONNECTED/,
+      /ERR_FAILED/,
       /401 \(Unauthorized\)/,
       /403 \(Forbidden\)/,
       /409 \(Conflict\)/,
@@ -149,14 +150,18 @@ describe('a keeper with wet hands, at 390 px', () => {
       rows: [{ feeding: 'all', breathing: 'normal', foundDead: 0, count: null, origin: 'online' }],
     })
 
-    // the worker that opens the application without a signal has to be there before the signal goes
-    await page.goto(`${app.url}/enclosures/${code}/observe`)
+    // the worker that opens the application without a signal is there for whoever has signed in, on any sheet
+    await page.goto(`${app.url}/rounds`)
     await page.evaluate(async () => {
       await navigator.serviceWorker.ready
     })
-    await page.reload()
-    await page.getByText('Say one thing, then save.').waitFor()
     await page.context().setOffline(true)
+    await page.goto(`${app.url}/settings/own`)
+    await page.getByRole('heading', { name: /^No signal, and this sheet is not kept/ }).waitFor()
+    await page.getByRole('link', { name: 'Go to the round' }).click()
+    await page.getByText(/This list is from/).waitFor()
+    await page.goto(`${app.url}/enclosures/${code}/observe`)
+    await page.getByText('Say one thing, then save.').waitFor()
     await page.getByText(/^No signal since/).waitFor()
     await page.getByRole('radio', { name: 'Some', exact: true }).click()
     await page.getByRole('radio', { name: 'Fast', exact: true }).click()

@@ -7,6 +7,7 @@ import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
 import { useSingleKeys } from '../../lib/preferences.ts'
 import { useOutboxSending } from '../../lib/use-outbox.ts'
+import { useWithoutSignal } from '../../lib/use-without-signal.ts'
 import { Banner } from '../../ui/banner.tsx'
 import { FindDialog } from '../../ui/find-dialog.tsx'
 import { HourRuler } from '../../ui/hour-ruler.tsx'
@@ -39,6 +40,7 @@ export function Component() {
 function SignedInFrame() {
   const me = useMe()
   useOutboxSending()
+  useWithoutSignal()
   const [front, setFront] = useState<'find' | 'keys' | null>(null)
   const navigate = useNavigate()
   const now = useFacilityNow(me.facility.zone)
