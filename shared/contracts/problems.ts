@@ -18,6 +18,7 @@ export const problemStatus = {
   'password-too-weak': 422,
   'may-not': 403,
   'foreign-origin': 403,
+  'different-person': 409,
   'too-many-requests': 429,
   'stale-version': 409,
   'id-already-used': 409,

@@ -93,6 +93,10 @@ export const observationWords = defineMessages({
     'What was entered here and is not with the server. It is sent by itself, in order, when there is a signal.',
   unsentNone: 'Everything is sent',
   unsentNoneWhy: 'Nothing waits on this device.',
+  unsentOfOthers: (p: { count: number }) =>
+    p.count === 1
+      ? 'One entry of another person waits on this device. It is sent when whoever made it signs in here.'
+      : `${p.count} entries of other people wait on this device. Each is sent when whoever made it signs in here.`,
   sendNow: 'Send now',
   stillWaits: 'Nobody answered. What waits is kept.',
   waiting: 'Not yet sent',

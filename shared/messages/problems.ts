@@ -12,6 +12,7 @@ export const problemTitles = defineMessages({
   'password-wrong': 'That password is not right',
   'password-too-weak': 'Choose a longer password',
   'may-not': 'Your roles do not include this',
+  'different-person': 'Somebody else is signed in here now',
   'foreign-origin': 'This request came from another site',
   'too-many-requests': 'Too many requests',
   'stale-version': 'Somebody changed this while you were writing',

@@ -1,6 +1,8 @@
 import type { BodyOf, Contract, ParamsOf, QueryOf, ReplyOf } from '../../shared/contracts/contract.ts'
 import type { ProblemBody } from '../../shared/contracts/problems.ts'
+import { personHeader } from '../../shared/contracts/person-header.ts'
 import { clientWords } from '../../shared/messages/client.ts'
+import { pagePerson } from './page-person.ts'
 import { ProblemError } from './problem-error.ts'
 
 interface Call {
@@ -12,6 +14,8 @@ interface Call {
   signal?: AbortSignal | undefined
   /** How long to wait for an answer. */
   patienceMs?: number | undefined
+  /** Who wrote it, where that was another time than now: an entry that waited on the device. */
+  writtenBy?: string | undefined
 }
 
 type WithParams<P> = unknown extends P ? { params?: undefined } : { params: P }
@@ -21,7 +25,7 @@ type WithQuery<Q> = unknown extends Q
 type WithBody<B> = unknown extends B ? { body?: undefined } : { body: B | FormData }
 
 /** Options of a call, typed by its contract: what it states must be given, what it does not state cannot. */
-export type CallOptions<C extends Contract> = Pick<Call, 'signal' | 'patienceMs' | 'key'> &
+export type CallOptions<C extends Contract> = Pick<Call, 'signal' | 'patienceMs' | 'key' | 'writtenBy'> &
   WithParams<ParamsOf<C>> &
   WithQuery<QueryOf<C>> &
   WithBody<BodyOf<C>>
@@ -64,6 +68,8 @@ async function send(of: Address, call: Call): Promise<Response> {
   const headers: Record<string, string> = { accept: 'application/json, application/problem+json, */*' }
   if (of.idempotent === 'by-key' && call.key === undefined) throw new Error(`${of.id} needs a key`)
   if (call.key !== undefined) headers['idempotency-key'] = call.key
+  const writtenBy = of.method === 'get' ? null : (call.writtenBy ?? pagePerson.now().id)
+  if (writtenBy !== null) headers[personHeader] = writtenBy
   const multipart = call.body instanceof FormData
   if (call.body !== undefined && !multipart) headers['content-type'] = 'application/json'
   let response: Response
@@ -92,7 +98,9 @@ async function send(of: Address, call: Call): Promise<Response> {
     )
   }
   if (response.ok) return response
-  throw await problemOf(response)
+  const problem = await problemOf(response)
+  if (problem.code === 'different-person') pagePerson.differs(String(problem.body['signed_in']))
+  throw problem
 }
 
 async function problemOf(response: Response): Promise<ProblemError> {

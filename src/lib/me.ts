@@ -4,10 +4,12 @@ import type { QueryClient } from '@tanstack/react-query'
 import { signInAddresses } from '../../shared/contracts/sign-in.addresses.ts'
 import type { getMe, Me } from '../../shared/contracts/sign-in.contract.ts'
 import { api } from './api-client.ts'
+import { pagePerson } from './page-person.ts'
 import { isProblem } from './problem-error.ts'
 import { meKey } from './query-client.ts'
 
-const personKey = 'pratique.person'
+/** Where other windows of this browser see who is signed in. */
+export const personKey = 'pratique.person'
 
 /** The person who was signed in when the server last answered; storage can be refused, then nobody is known without it. */
 function keptPerson(): Me | null {
@@ -31,23 +33,36 @@ function keepPerson(me: Me | null): void {
 /** Who is signed in; `null` for nobody. */
 export const meQuery = queryOptions({
   queryKey: meKey,
-  queryFn: async ({ signal }): Promise<Me | null> => {
+  queryFn: async ({ signal, client }): Promise<Me | null> => {
+    const before = client.getQueryData<Me | null>(meKey)
     try {
       const me = await api<typeof getMe>(signInAddresses.getMe, { signal })
       keepPerson(me)
+      // the page stays that of whoever opened it, and is told: see src/app/other-person.tsx
+      if (before && before.id !== me.id) {
+        pagePerson.differs(me.printedName)
+        return before
+      }
+      pagePerson.drawnFor(me.id)
       return me
     } catch (error) {
       if (isProblem(error, 'not-signed-in')) {
         keepPerson(null)
+        pagePerson.drawnFor(null)
         return null
       }
       // no signal: whoever was signed in still is, for what is kept on this device; the server decides when it answers
-      const last = isProblem(error) && error.noAnswer ? keptPerson() : null
-      if (last) return last
+      const last = isProblem(error) && error.noAnswer ? (before ?? keptPerson()) : null
+      if (last) {
+        pagePerson.drawnFor(last.id)
+        return last
+      }
       throw error
     }
   },
   staleTime: 60_000,
+  // another window of this browser may have signed somebody else in
+  refetchOnWindowFocus: 'always',
   networkMode: 'always',
 })
 
@@ -68,6 +83,7 @@ export function useMe(): Me {
 export function changePerson(client: QueryClient, me: Me | null): void {
   client.setQueryData(meKey, me)
   keepPerson(me)
+  pagePerson.drawnFor(me?.id ?? null)
   client.removeQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
   client.getMutationCache().clear()
 }

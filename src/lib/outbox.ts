@@ -22,6 +22,7 @@ export interface OutboxNow {
 
 /** Problems after which the same entry may be taken later as it is; everything else is a refusal of this entry. */
 const passing = new Set([
+  'different-person',
   'not-signed-in',
   'password-change-required',
   'not-understood',
@@ -52,7 +53,7 @@ export function createOutbox(parts: {
   /** Entries that could not be kept on the disk live as long as the page. */
   const loose = new Map<string, OutboxItem>()
   const listeners = new Set<() => void>()
-  let running: Promise<void> | null = null
+  const running = new Map<string, Promise<void>>()
 
   function tell(change: Partial<OutboxNow>): void {
     state = { ...state, ...change }
@@ -127,12 +128,13 @@ export function createOutbox(parts: {
     /** Keeps a new entry. It is safe once this is done; sending is another matter. */
     enter: (item: NewItem): Promise<void> =>
       write({ ...item, state: 'waiting', tries: 0, refusal: null, struckReason: null }),
-    /** Sends what waits for a person, the earliest first, until one can't be sent. One sending at a time. */
+    /** Sends what waits for a person, the earliest first, until one can't be sent. One sending of theirs at a time. */
     flush(personId: string): Promise<void> {
-      running ??= alone(() => sendAll(personId)).finally(() => {
-        running = null
-      })
-      return running
+      const under = running.get(personId)
+      if (under) return under
+      const sending = alone(() => sendAll(personId)).finally(() => running.delete(personId))
+      running.set(personId, sending)
+      return sending
     },
     /** A refused entry, mended: it waits again, with the same id. */
     async mend(id: string, body: OutboxItem['body']): Promise<void> {
@@ -156,8 +158,13 @@ export type Outbox = ReturnType<typeof createOutbox>
 /** The outbox of this browser. */
 export const outbox = createOutbox({
   store: deviceStore,
-  send: ({ address, params, body }) =>
-    api<Contract>(address, { params, body, patienceMs: 8_000 } as unknown as CallOptions<Contract>),
+  send: ({ address, params, body, personId }) =>
+    api<Contract>(address, {
+      params,
+      body,
+      patienceMs: 8_000,
+      writtenBy: personId,
+    } as unknown as CallOptions<Contract>),
   alone: async (work) => {
     // absent on addresses without TLS; what is sent twice is kept once all the same
     const locks = navigator.locks as LockManager | null | undefined

@@ -9,6 +9,8 @@ export interface MyOutbox extends Pick<OutboxNow, 'downSince' | 'durable'> {
   waiting: readonly OutboxItem[]
   refused: readonly OutboxItem[]
   struck: readonly OutboxItem[]
+  /** How many entries of other people wait on this device until those sign in. */
+  ofOthers: number
 }
 
 /** What waits on this device for the signed-in person. */
@@ -16,8 +18,16 @@ export function useOutbox(): MyOutbox {
   const { id } = useMe()
   const { items, downSince, durable } = useSyncExternalStore(outbox.subscribe, outbox.now)
   const own = items.filter((item) => item.personId === id)
+  const ofOthers = items.filter((item) => item.personId !== id && item.state !== 'struck').length
   const of = (state: OutboxItem['state']) => own.filter((item) => item.state === state)
-  return { waiting: of('waiting'), refused: of('refused'), struck: of('struck'), downSince, durable }
+  return {
+    waiting: of('waiting'),
+    refused: of('refused'),
+    struck: of('struck'),
+    ofOthers,
+    downSince,
+    durable,
+  }
 }
 
 const tryEveryMs = 15_000

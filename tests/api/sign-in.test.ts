@@ -99,6 +99,38 @@ describe('sign-in', () => {
     await put().expect(200)
   })
 
+  it('takes nothing that another person wrote than the one who is signed in', async () => {
+    const keeper = await api.as('keeper')
+    const admin = await api.as('administrator')
+    const note = (writtenBy: string) => {
+      const id = api.nextId()
+      const send = keeper.agent
+        .post('/api/handover-notes')
+        .set('Pratique-Person', writtenBy)
+        .send({ id, words: `Written by ${writtenBy}` })
+      return { id, send }
+    }
+    const own = await note(keeper.id).send
+    expect(own.status).toBe(201)
+    const foreign = await note(admin.id).send
+    expect(foreign.status).toBe(409)
+    expect(foreign.body).toMatchObject({ code: 'different-person', signed_in: 'Test keeper' })
+    expect(foreign.body.detail).toMatch(/Nothing of it was saved/)
+    const notes = (await keeper.agent.get('/api/today').expect(200)).text
+    expect(notes).toContain(`Written by ${keeper.id}`)
+    expect(notes).not.toContain(`Written by ${admin.id}`)
+    // also what the one who is signed in may not do is no refusal of theirs: it was another who wrote it
+    const people = await keeper.agent
+      .post('/api/people')
+      .set('Pratique-Person', admin.id)
+      .send({ id: api.nextId() })
+    expect(people.body.code).toBe('different-person')
+    // and whoever has signed out is asked to sign in first
+    await api.anonymous().post('/api/handover-notes').set('Pratique-Person', admin.id).send({}).expect(401)
+    // reading writes nothing, and signing in is how the person changes
+    await keeper.agent.get('/api/me').set('Pratique-Person', admin.id).expect(200)
+  })
+
   it('asks for a new password after a one-time password, and for nothing before it', async () => {
     const admin = await api.as('administrator')
     const id = api.nextId()

@@ -163,6 +163,38 @@ describe('the frame', () => {
     await page.waitForURL(/\/sign-in/)
   })
 
+  it('says on a page left open that somebody else signed in, and writes nothing from it', async () => {
+    const { page } = await newSession(browser, desk)
+    await page.goto(`${app.url}/`)
+    await signIn(page, 'keeper@harrow-point.example')
+    await page.getByRole('textbox', { name: 'Note for the next watch' }).fill('Half a sentence of the keeper')
+
+    // another window of the same browser signs somebody else in
+    const other = await page.context().newPage()
+    const signInThere = async (email: string, printedName: string) => {
+      const status = await other.evaluate(async (body) => {
+        const headers = { 'content-type': 'application/json' }
+        return (await fetch('/api/sign-in', { method: 'POST', headers, body })).status
+      }, JSON.stringify({ email, password }))
+      expect(status).toBe(200)
+      await other.goto(`${app.url}/settings/own`)
+      await other.getByRole('button', { name: `${printedName}, menu` }).waitFor()
+      await page.bringToFront()
+    }
+    await other.goto(`${app.url}/settings/own`)
+    await signInThere('veterinarian@harrow-point.example', 'Test veterinarian')
+    const told = page.getByRole('alertdialog', { name: 'Test veterinarian is signed in on this device now' })
+    await told.waitFor()
+    await expectAccessible(page, 'another person is signed in')
+
+    // the writer comes back: the page is theirs again, with what was typed
+    await signInThere('keeper@harrow-point.example', 'Test keeper')
+    await told.waitFor({ state: 'detached' })
+    expect(await page.getByRole('textbox', { name: 'Note for the next watch' }).inputValue()).toBe(
+      'Half a sentence of the keeper',
+    )
+  })
+
   it('puts the list of sheets behind the mark on a phone', async () => {
     const { page } = await newSession(browser, phone)
     await page.goto(`${app.url}/settings/own`)

@@ -1,5 +1,6 @@
 import type { Contract } from '../../../shared/contracts/contract.ts'
 import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
+import { differentPersonWords } from '../../../shared/messages/different-person.ts'
 import { permissionWords } from '../../../shared/messages/permissions.ts'
 import { Problem } from './problem.ts'
 import type { Actor } from './request-context.ts'
@@ -8,6 +9,23 @@ import type { Actor } from './request-context.ts'
 export interface SignedIn extends Actor {
   personId: string
   mustChangePassword: boolean
+}
+
+/** Requests that change nothing need not say for whom they are. */
+const reading = new Set(['get'])
+
+/**
+ * Refuses what was written by one person and arrives in the session of another: two windows of one browser share a
+ * session. Absent passes, so that plain HTTP clients work.
+ *
+ * @param writtenBy the id that the client sent with its request, see `personHeader`
+ */
+export function checkWriter(of: Contract, person: SignedIn | null, writtenBy: string | undefined): void {
+  if (reading.has(of.method) || !person || writtenBy === undefined || writtenBy === person.personId) return
+  throw new Problem('different-person', {
+    detail: differentPersonWords.detail({ name: person.printedName }),
+    extra: { signed_in: person.printedName },
+  })
 }
 
 /** What a person with a one-time password may still do. */

@@ -5,8 +5,9 @@ import { pipeline } from 'node:stream/promises'
 import type { z } from 'zod'
 import { successStatus } from '../../../shared/contracts/contract.ts'
 import type { Contract } from '../../../shared/contracts/contract.ts'
+import { personHeader } from '../../../shared/contracts/person-header.ts'
 import { bodyHashOf } from '../database/transactions.ts'
-import { checkGate } from './guard.ts'
+import { checkGate, checkWriter } from './guard.ts'
 import type { SignedIn } from './guard.ts'
 import { Problem } from './problem.ts'
 import { installation } from './request-context.ts'
@@ -29,6 +30,7 @@ export interface RouteTools {
 function guard(of: Contract, tools: RouteTools): RequestHandler {
   return async (req, _res, next) => {
     const person = tools.personOf(req)
+    if (of.action !== 'public') checkWriter(of, person, req.get(personHeader))
     try {
       checkGate(of, person)
     } catch (error) {

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { successStatus } from '../../../shared/contracts/contract.ts'
 import type { Contract } from '../../../shared/contracts/contract.ts'
 import { allContracts } from '../../../shared/contracts/index.ts'
+import { personHeader } from '../../../shared/contracts/person-header.ts'
 import { ProblemBody, problemStatus } from '../../../shared/contracts/problems.ts'
 
 type Schema = Record<string, unknown>
@@ -65,6 +66,14 @@ function operationOf(of: Contract): Schema {
     description: 'A new UUID for each command, the same one on a retry',
     schema: { type: 'string' },
   }
+  const writer = {
+    name: personHeader,
+    in: 'header',
+    required: false,
+    description:
+      'Id of whoever wrote it; refused as different-person when somebody else is signed in by then',
+    schema: { type: 'string' },
+  }
   return {
     operationId: of.id,
     summary: of.summary,
@@ -73,6 +82,7 @@ function operationOf(of: Contract): Schema {
       ...parametersOf(of.params, 'path'),
       ...parametersOf(of.query, 'query'),
       ...(of.idempotent === 'by-key' ? [key] : []),
+      ...(of.method === 'get' || of.action === 'public' ? [] : [writer]),
     ],
     ...(of.body
       ? {

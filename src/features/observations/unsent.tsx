@@ -19,7 +19,7 @@ import { SignalBanner } from './signal-banner.tsx'
 /** What was entered on this device and is not with the server: waiting, not taken, struck out. Nothing is lost. */
 export function Unsent() {
   const me = useMe()
-  const { waiting, refused, struck } = useOutbox()
+  const { waiting, refused, struck, ofOthers } = useOutbox()
   const [busy, setBusy] = useState(false)
   const [tried, setTried] = useState(false)
   const [striking, setStriking] = useState<OutboxItem | null>(null)
@@ -44,6 +44,7 @@ export function Unsent() {
       </Area>
       <Area>
         <SignalBanner />
+        {ofOthers > 0 ? <p className="pane">{words.unsentOfOthers({ count: ofOthers })}</p> : null}
         {waiting.length + refused.length + struck.length === 0 ? (
           <div className="pane">
             <ListEmpty title={words.unsentNone} act={<Link to={paths.rounds()}>{words.back}</Link>}>

@@ -1,9 +1,11 @@
 import { afterEach, describe, expect, it, vi } from 'vitest'
 import { z } from 'zod'
 import { contract } from '../../../shared/contracts/contract.ts'
-import { getMe, signIn } from '../../../shared/contracts/sign-in.contract.ts'
+import { personHeader } from '../../../shared/contracts/person-header.ts'
+import { getMe, signIn, signOut } from '../../../shared/contracts/sign-in.contract.ts'
 import { issueOneTimePassword, listPeople } from '../../../shared/contracts/people.contract.ts'
 import { addressOf, api, apiFile } from '../../../src/lib/api-client.ts'
+import { pagePerson } from '../../../src/lib/page-person.ts'
 import { isProblem } from '../../../src/lib/problem-error.ts'
 import type { ProblemError } from '../../../src/lib/problem-error.ts'
 
@@ -54,6 +56,22 @@ describe('a call', () => {
     await api(issueOneTimePassword, { params, key: 'k-1' })
     expect(fetching.mock.calls[0]?.[1]?.headers).toMatchObject({ 'idempotency-key': 'k-1' })
     await expect(api(issueOneTimePassword, { params })).rejects.toThrow('needs a key')
+  })
+
+  it('says for whom it writes, and notices when somebody else is signed in by then', async () => {
+    const fetching = answers(200, {})
+    pagePerson.drawnFor('p-1')
+    await api(signOut, {})
+    await api(signOut, { writtenBy: 'p-0' })
+    await api(getMe, {})
+    const said = fetching.mock.calls.map(([, init]) => new Headers(init?.headers).get(personHeader))
+    expect(said).toEqual(['p-1', 'p-0', null])
+    expect(pagePerson.now().other).toBeNull()
+    vi.restoreAllMocks()
+    answers(409, { code: 'different-person', title: 'Somebody else', signed_in: 'Ilse Test' })
+    expect(await problem(api(signOut, {}))).toMatchObject({ code: 'different-person' })
+    expect(pagePerson.now()).toEqual({ id: 'p-1', other: 'Ilse Test' })
+    pagePerson.drawnFor(null)
   })
 
   it('answers nothing for 204', async () => {

@@ -108,6 +108,22 @@ describe('the outbox', () => {
     expect(server.got.map(({ id }) => id)).toEqual(['b', 'a'])
   })
 
+  it('keeps an entry whose writer is not the one signed in, and sends it when they are', async () => {
+    let signedIn = 'vet'
+    const server = aServer((item) => (item.personId === signedIn ? null : problem(409, 'different-person')))
+    const outbox = createOutbox({ store: aDisk(), send: server.send })
+    await outbox.enter(entry('a', 1))
+    await outbox.enter(entry('b', 2, { personId: 'vet' }))
+    // the page is still the keeper's while a veterinarian has signed in beside it
+    await Promise.all([outbox.flush('keeper'), outbox.flush('vet')])
+    expect(server.got.map(({ id }) => id)).toEqual(['b'])
+    expect(states(outbox)).toEqual([['a', 'waiting', 1]])
+    expect(outbox.now().downSince).toBeNull()
+    signedIn = 'keeper'
+    await outbox.flush('keeper')
+    expect(server.got.map(({ id }) => id)).toEqual(['b', 'a'])
+  })
+
   it('never sends what was struck out, and keeps it readable with the reason', async () => {
     const server = aServer((item) => (item.id === 'a' ? problem(422, 'bad-input') : null))
     const outbox = createOutbox({ store: aDisk(), send: server.send })
