@@ -108,6 +108,7 @@ export function compose(outside: Outside) {
     ...parts,
     facility: facility.service,
     orders,
+    animals,
     documents,
   })
   const handover = createHandover(parts)

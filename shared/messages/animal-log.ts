@@ -52,6 +52,8 @@ export const discrepancyNames = defineMessages({
   'place-contradicted': 'gone at a time at which later moves have it elsewhere.',
   'identifier-twice': 'one mark read on two animals.',
   'count-differs': 'a count that differs from the ledger.',
+  'dose-amount-differs': 'another amount given than was signed and worked out.',
+  'dosed-in-absence': 'a dose recorded while it was not in that water.',
 } satisfies Record<DiscrepancyKind, string>)
 
 export const outcomeNames = defineMessages({
@@ -88,4 +90,8 @@ export const discrepancySentences = defineMessages({
     p.said('low') === p.said('high')
       ? `${p.said('low')} were counted, ${p.said('ledger')} are in the ledger.`
       : `${p.said('low')} to ${p.said('high')} were estimated, ${p.said('ledger')} are in the ledger.`,
+  'dose-amount-differs': (p) =>
+    `Dose ${p.said('key')} of ${p.said('order')}: ${p.said('given')} was recorded as given. Signed: ${p.said('signed')}. Worked out for the water then: ${p.said('workedOut')}.`,
+  'dosed-in-absence': (p) =>
+    `Dose ${p.said('key')} of ${p.said('order')} was recorded as given in ${p.said('enclosure')}; by the register no animal of the order was in that water then.`,
 } satisfies Record<DiscrepancyKind, (p: Facts) => string>)

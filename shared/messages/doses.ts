@@ -15,6 +15,28 @@ export const doseWords = defineMessages({
   secondOutdated: 'The lot or the volume has changed since the second calculation. Calculate again.',
   amountDiffers: (p: { amount: string }) =>
     `The amount has to be ${p.amount}, within one step of the balance.`,
+  animalsGone: 'No animal of this order was in the water',
+  animalsGoneText: (p: { animals: string }) =>
+    `By the register none of them was in this water at that time: ${p.animals}. A veterinarian reviews it.`,
+  animalsLeft: 'Not all animals of the order were in the water',
+  animalsLeftText: (p: { animals: string }) => `No longer in this water: ${p.animals}.`,
+  animalsLeftNow: 'Some animals of this order have left the water',
+  noLongerHere: (p: { animals: string }) => `${p.animals} (no longer in this water)`,
+  allGone: (p: { animals: string }) =>
+    `The animals of this order are not in this water any more: ${p.animals}. Give nothing. A veterinarian amends or discontinues the order.`,
+  unexplained:
+    'A dose of this order was recorded that does not fit it. A veterinarian looks at it and explains it first.',
+  amountOff: 'Another amount was given than was worked out',
+  amountOffText: (p: { given: string; signed: string; workedOut: string }) =>
+    `Given: ${p.given}. Signed: ${p.signed}. Worked out for the water then: ${p.workedOut}.`,
+  timesMore: (p: { times: string }) => `That is about ${p.times} times as much.`,
+  timesLess: (p: { times: string }) => `That is about ${p.times} times less.`,
+  notComparable: 'The two cannot be compared: one is a weight and the other a volume.',
+  notWorkedOut: 'not possible',
+  notJudged: 'The water of that time cannot be judged',
+  notJudgedText: 'No rule was applied to this dose. A veterinarian reviews it.',
+  volumeMoved: 'The volume had moved more than the order allows',
+  volumeMovedText: 'A veterinarian would have had to amend the order first.',
   wrongEnclosure: 'The enclosure read is not the one of the order.',
   wrongLot: 'The lot read is not the one of the first calculation.',
   signedAfter: 'The order was signed after this dose',

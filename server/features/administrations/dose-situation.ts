@@ -13,6 +13,7 @@ import { known } from '../../../shared/domain/cautions/fact.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import type { Animals } from '../animals/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
 import { readDoses } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
@@ -36,12 +37,23 @@ export interface DoseSituation {
   judgement: OrderJudgement | null
   answer: CautionAnswer | null
   drift: Drift | null
+  /** The animals that the order names; `isHere` null while the water cannot be read. */
+  treated: { animalId: string; name: string; isHere: boolean | null }[]
+  /** Records of the order's doses that a veterinarian has yet to explain. */
+  unexplained: number
+}
+
+/** The treated animals that are not in the water any more: moved, dead, gone. */
+export function goneOf({ treated }: Pick<DoseSituation, 'treated'>): { all: boolean; names: string[] } {
+  const gone = treated.filter(({ isHere }) => isHere === false)
+  return { all: gone.length > 0 && gone.length === treated.length, names: gone.map(({ name }) => name) }
 }
 
 export interface DoseSituationParts {
   dataSource: Db
   orders: Orders
   queries: OrderQueries
+  animals: Animals
 }
 
 /** What is known of an order's earlier doses goes into the facts of its spacing. */
@@ -70,6 +82,17 @@ function withSpacing(
     ...facts,
     order: { ...facts.order, dosesGiven, spacing: known(spacing, null, 'the doses recorded here') },
   }
+}
+
+/** The animals that the signature names, and whether they are among those in the water. */
+function treatedOf({ water }: SignedOrder, here: readonly string[] | null): DoseSituation['treated'] {
+  return water.animals
+    .filter(({ treated }) => treated)
+    .map(({ animalId, accession, commonName }) => ({
+      animalId,
+      name: `${accession} ${commonName}`,
+      isHere: here && here.includes(animalId),
+    }))
 }
 
 /** The doses that a signed version plans, by the clock of its signature. */
@@ -137,5 +160,10 @@ export async function readDoseSituation(
         factsAtSigning: content.facts as unknown as CautionFacts,
       }),
     drift: drift?.ok ? drift.value : null,
+    treated: treatedOf(content, found && found.situation.animals.map(({ animalId }) => animalId)),
+    unexplained: await parts.animals.questions.openDiscrepanciesOfDoses(
+      records.map(({ id }) => id),
+      db,
+    ),
   }
 }

@@ -1,6 +1,7 @@
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
+import type { Animals } from '../animals/index.ts'
 import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { OpenOrder, Orders } from '../orders/index.ts'
@@ -19,10 +20,16 @@ export type { RecentDoseRow } from './dose-work.reads.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow]
 
 export function createAdministrations(
-  parts: Parts & { facility: FacilityService; orders: Orders; documents: Documents; pdf: PdfPool },
+  parts: Parts & {
+    facility: FacilityService
+    orders: Orders
+    animals: Animals
+    documents: Documents
+    pdf: PdfPool
+  },
 ) {
-  const { dataSource, orders, clock } = parts
-  const outside = { dataSource, orders, queries: orders.queries }
+  const { dataSource, orders, animals, clock } = parts
+  const outside = { dataSource, orders, animals, queries: orders.queries }
   const service = createAdministrationsService({
     ...parts,
     ...outside,

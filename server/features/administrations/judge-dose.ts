@@ -8,6 +8,7 @@ import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import type { SignedOrder } from '../orders/index.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
+import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 
 /** Smallest step of the balance of an order; a hundredth of a gram where it names none. */
@@ -70,6 +71,9 @@ export function obstacles(situation: DoseSituation, calculations: readonly Calcu
   if (row.phase === 'held') why.push(doseWords.held)
   if (row.phase === 'discontinued' || row.phase === 'expired') why.push(doseWords.ended)
   if (records.some((record) => record.dose_key === situation.planned.key)) why.push(doseWords.alreadyRecorded)
+  const gone = goneOf(situation)
+  if (gone.all) why.push(doseWords.allGone({ animals: gone.names.join('; ') }))
+  if (situation.unexplained > 0) why.push(doseWords.unexplained)
   if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
   if (drift && !drift.within)
     why.push(

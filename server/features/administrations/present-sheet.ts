@@ -10,12 +10,14 @@ import { formatExpression } from '../../../shared/domain/quantities/format-expre
 import { formatWorkingValue } from '../../../shared/domain/quantities/format-working-value.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import { workingLabels } from '../../../shared/messages/working.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { recordOf } from './administrations.reads.ts'
 import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts'
 import { compareCalculations } from './compare-calculations.ts'
+import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { divisionOf, needsSecond, obstacles, overrideFor, secondStands } from './judge-dose.ts'
 
@@ -267,9 +269,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     drug: content.product.establishedName,
     productName: content.product.productName,
     form: product?.form ?? null,
-    treated: content.water.animals
-      .filter((animal) => animal.treated)
-      .map((animal) => `${animal.countText}, ${animal.commonName}`),
+    treated: saidTreated(situation),
     // the second person reads the lot from the container
     lots: (hide ? [] : (product?.lots ?? [])).map(({ id, lotNumber, state, expiresOn }) => ({
       id,
@@ -295,10 +295,13 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
         })),
     driftPercent: drift?.percent ?? null,
     driftWithin: drift?.within ?? false,
-    cautions: (answer?.cautions ?? []).map((caution) => ({
-      ...saidForSheet(caution, zone),
-      overridden: presentOverride(situation, caution),
-    })),
+    cautions: [
+      ...leftTheWater(situation),
+      ...(answer?.cautions ?? []).map((caution) => ({
+        ...saidForSheet(caution, zone),
+        overridden: presentOverride(situation, caution),
+      })),
+    ],
     steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
     first: presentFirst(first, hide, actor),
@@ -308,6 +311,34 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     recorded: own.map((record) => presentRecord(record, records)),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
+}
+
+/** The animals as signed, each that is not in the water any more marked so. */
+function saidTreated({ content, treated }: DoseSituation): string[] {
+  const gone = new Set(treated.filter(({ isHere }) => isHere === false).map(({ animalId }) => animalId))
+  return content.water.animals
+    .filter((animal) => animal.treated)
+    .map(({ animalId, countText, commonName }) => {
+      const said = `${countText}, ${commonName}`
+      return gone.has(animalId) ? doseWords.noLongerHere({ animals: said }) : said
+    })
+}
+
+/** Some of the animals have left the water: it goes on for the others, and whoever doses knows. */
+function leftTheWater(situation: DoseSituation): BathSheet['cautions'] {
+  const { all, names } = goneOf(situation)
+  if (all || names.length === 0) return []
+  return [
+    {
+      ruleId: 'record',
+      code: 'animals-left',
+      level: 'warning',
+      title: doseWords.animalsLeftNow,
+      text: doseWords.animalsLeftText({ animals: names.join('; ') }),
+      resolve: [],
+      overridden: null,
+    },
+  ]
 }
 
 /** What an order opens to keepers is feed and topical, so giving a bath is decided; who calculated first is not known here. */

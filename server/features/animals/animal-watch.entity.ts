@@ -2,6 +2,9 @@ import { Column, Entity, PrimaryColumn } from 'typeorm'
 import type { DiscrepancyKind, DiscrepancyOutcome } from '../../../shared/domain/animals/discrepancy.ts'
 import { RecordedFact } from './recorded-fact.entity.ts'
 
+/** What a discrepancy names as its source where a recorded dose left it. */
+export const doseSource = 'dose'
+
 /** A recorded fact that does not fit what stood in the ledgers, for a named role to explain. */
 @Entity('discrepancies')
 export class DiscrepancyRow extends RecordedFact {

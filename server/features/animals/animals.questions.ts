@@ -5,10 +5,11 @@ import type { SensitivityCode, SensitivityLevel } from '../../../shared/domain/t
 import type { QuarantineKindName, TaxonGroup } from '../../../shared/domain/taxa/taxon-group.ts'
 import type { Count, NewestWeight } from '../../../shared/contracts/animal-primitives.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { doseSource } from './animal-watch.entity.ts'
 import { presentCount, presentNewestWeight } from './animals.present.ts'
 import { readAnimals } from './animals.reads.ts'
 import type { AnimalReadRow } from './animals.reads.ts'
-import { readDeaths, readDiscrepancies, readLocks } from './chart.reads.ts'
+import { countOpenDiscrepancies, readDeaths, readDiscrepancies, readLocks } from './chart.reads.ts'
 import { readStaysIn } from './stays.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 
@@ -138,6 +139,11 @@ export function createAnimalQuestions(parts: { dataSource: Db }) {
         forRole: row.for_role,
         happenedAt: row.happened_at.toISOString(),
       }))
+    },
+
+    /** How many discrepancies of these doses nobody has explained: they lock the next dose. */
+    async openDiscrepanciesOfDoses(doseIds: readonly string[], db: Db = parts.dataSource): Promise<number> {
+      return countOpenDiscrepancies(db, doseSource, doseIds)
     },
 
     /** Stays in any of the enclosures that touch a time, for tracing; `until` null lasts on. */

@@ -238,6 +238,19 @@ export function readDiscrepancies(db: Db, filter: DiscrepanciesFilter): Promise<
   )
 }
 
+export async function countOpenDiscrepancies(
+  db: Db,
+  sourceKind: string,
+  sourceIds: readonly string[],
+): Promise<number> {
+  const [row]: [{ count: number }] = await db.query(
+    `SELECT count(*)::int AS count FROM discrepancies q WHERE q.source_kind = $1 AND q.source_id = ANY ($2::uuid[])
+        AND NOT EXISTS (SELECT 1 FROM discrepancy_resolutions z WHERE z.discrepancy_id = q.id)`,
+    [sourceKind, sourceIds],
+  )
+  return row.count
+}
+
 /** Family and history of one animal that its sheet names. */
 export async function readAnimalTies(
   db: Db,

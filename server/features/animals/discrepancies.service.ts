@@ -1,4 +1,4 @@
-import type { DiscrepancyOutcome } from '../../../shared/domain/animals/discrepancy.ts'
+import type { DiscrepancyKind, DiscrepancyOutcome } from '../../../shared/domain/animals/discrepancy.ts'
 import type { CountKind } from '../../../shared/domain/ledger/count-entry.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
@@ -6,7 +6,9 @@ import { roleNames } from '../../../shared/messages/permissions.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
+import type { FactTimes } from '../facility/index.ts'
 import type { Animal } from './animal.entity.ts'
+import { doseSource } from './animal-watch.entity.ts'
 import type { DiscrepancyRow } from './animal-watch.entity.ts'
 import { lockAnimals } from './animals.repository.ts'
 import { subjectOf } from './moves.service.ts'
@@ -45,9 +47,49 @@ export function createDiscrepancies(parts: MoveParts) {
     throw byHand()
   }
 
+  async function resolveRow(
+    tx: Tx,
+    discrepancyId: string,
+    given: { outcome: DiscrepancyOutcome; reason: string },
+  ): Promise<void> {
+    await repository.insertResolution(tx, {
+      id: parts.ids.next(),
+      discrepancyId,
+      outcome: given.outcome,
+      reason: given.reason,
+      recordedAt: tx.at,
+      recordedBy: tx.actor.personId,
+    })
+  }
+
   const byHand = () => refuseField('bad-input', '/outcome', animalRefusals.resolveByHand)
 
+  const openOfSource = (tx: Tx, doseId: string) =>
+    repository.openDiscrepanciesOfSource(tx, { kind: doseSource, id: doseId })
+
   return {
+    /** A recorded dose that does not fit what was ordered: open on every animal of the order until it is explained. */
+    async openForDose(
+      tx: Tx,
+      given: {
+        animalIds: readonly string[]
+        kind: DiscrepancyKind
+        doseId: string
+        facts: Record<string, string | number>
+        times: FactTimes
+      },
+    ): Promise<void> {
+      const source = { kind: doseSource, id: given.doseId }
+      for (const animal of (await lockAnimals(tx, given.animalIds)).values())
+        await ledgers.openDiscrepancy(tx, animal, { ...given, source })
+    },
+
+    /** The dose was struck out: what it had left open is explained by that. */
+    async settleForDose(tx: Tx, doseId: string, reason: string): Promise<void> {
+      for (const open of await openOfSource(tx, doseId))
+        await resolveRow(tx, open.id, { outcome: 'seen-wrongly', reason })
+    },
+
     async resolveDiscrepancy(
       context: RequestContext,
       id: string,
@@ -65,14 +107,11 @@ export function createDiscrepancies(parts: MoveParts) {
         if (!animal) throw new Problem('not-found')
         if (await repository.isResolved(tx, id)) throw new Problem('already-resolved')
         if (given.outcome === 'count-corrected') await correctCount(tx, animal, row, given.reason)
-        await repository.insertResolution(tx, {
-          id: parts.ids.next(),
-          discrepancyId: id,
-          outcome: given.outcome,
-          reason: given.reason,
-          recordedAt: tx.at,
-          recordedBy: tx.actor.personId,
-        })
+        await resolveRow(tx, id, given)
+        // one dose went into the water of several animals: it is explained once
+        if (row.sourceKind === doseSource)
+          for (const other of await openOfSource(tx, row.sourceId))
+            if (other.kind === row.kind) await resolveRow(tx, other.id, given)
         tx.audit({
           action: 'discrepancy.resolve',
           subject: subjectOf(animal),

@@ -31,6 +31,19 @@ export function isAskedAbout(tx: Tx, sourceId: string): Promise<boolean> {
   return tx.manager.existsBy(DiscrepancyRow, { sourceId })
 }
 
+/** Open discrepancies that one record left behind, over all its animals. */
+export async function openDiscrepanciesOfSource(
+  tx: Tx,
+  source: { kind: string; id: string },
+): Promise<{ id: string; kind: string }[]> {
+  return tx.manager.query(
+    `SELECT q.id, q.kind FROM discrepancies q WHERE q.source_kind = $1 AND q.source_id = $2
+        AND NOT EXISTS (SELECT 1 FROM discrepancy_resolutions z WHERE z.discrepancy_id = q.id)
+      ORDER BY q.id`,
+    [source.kind, source.id],
+  )
+}
+
 export function isResolved(tx: Tx, discrepancyId: string): Promise<boolean> {
   return tx.manager.existsBy(DiscrepancyResolutionRow, { discrepancyId })
 }

@@ -8,6 +8,8 @@
  * - `place-contradicted`  the last of it left at a time at which later moves still have it elsewhere
  * - `identifier-twice`    one mark read on two animals
  * - `count-differs`       a count made differs from the ledger
+ * - `dose-amount-differs` another amount went into its water than was signed and worked out
+ * - `dosed-in-absence`    a dose was recorded for it at a time at which it was not in that water
  */
 export const discrepancyKinds = {
   'more-than-counted': 'registrar',
@@ -17,6 +19,8 @@ export const discrepancyKinds = {
   'place-contradicted': 'registrar',
   'identifier-twice': 'registrar',
   'count-differs': 'registrar',
+  'dose-amount-differs': 'veterinarian',
+  'dosed-in-absence': 'veterinarian',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
 
 /** Moves against a rule: until they are explained, the animal moves no further unasked. */

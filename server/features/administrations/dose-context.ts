@@ -1,0 +1,49 @@
+import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
+import { permissionWords } from '../../../shared/messages/permissions.ts'
+import type { Clock } from '../../platform/clock.ts'
+import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
+import type { FacilityService } from '../facility/index.ts'
+import type { CalculationReadRow } from './administrations.reads.ts'
+import * as repository from './administrations.repository.ts'
+import { readDoseSituation } from './dose-situation.ts'
+import type { DoseSituation, DoseSituationParts } from './dose-situation.ts'
+
+export interface AdministrationsParts extends DoseSituationParts {
+  transactions: Transactions
+  clock: Clock
+  facility: FacilityService
+  calculations(versionId: string, key: string, tx: Tx): Promise<CalculationReadRow[]>
+}
+
+/** The order as the audit trail names it. */
+export const subjectOf = ({ row }: DoseSituation) => ({ kind: 'order', id: row.id, label: row.number })
+
+export function personOf(tx: Tx): string {
+  if (tx.actor.personId === null) throw new Problem('not-signed-in')
+  return tx.actor.personId
+}
+
+/** A bath is given by a veterinarian or technician; what an order opens to keepers is feed and topical. */
+export function refuseGiver(context: RequestContext): void {
+  if (!decide('dose.give', context.actor.roles, {}).allowed)
+    throw new Problem('may-not', {
+      detail: permissionWords.whoMay({
+        roles: rolesThatMay('dose.give').filter((role) => decide('dose.give', [role], {}).allowed),
+      }),
+    })
+}
+
+/** One dose as it stands at an instant, with its order locked: people at one tank are judged one after the other. */
+export async function lockAndRead(
+  parts: DoseSituationParts,
+  tx: Tx,
+  dose: { number: string; key: string; at: Date; lotId?: string | null },
+): Promise<DoseSituation> {
+  if ((await repository.lockOrderHead(tx, dose.number)) === null) throw new Problem('not-found')
+  return readDoseSituation(parts, dose.number, dose.key, dose.at, {
+    db: tx.manager,
+    ...(dose.lotId === undefined ? {} : { lotId: dose.lotId }),
+  })
+}
