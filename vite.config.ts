@@ -73,6 +73,7 @@ export default defineConfig({
           environment: 'node',
           include: files('domain', 'published-values', 'contracts', 'architecture', 'pdf', 'platform'),
           testTimeout: 60_000,
+          hookTimeout: 60_000,
         },
       },
       { extends: true, test: { name: 'client', environment: 'happy-dom', include: files('client') } },
