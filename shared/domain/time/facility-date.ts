@@ -1,4 +1,11 @@
-import { type FacilityDate, type Instant, MS_PER_DAY, type Zone, isFacilityDate } from './instant.ts'
+import {
+  type FacilityDate,
+  type Instant,
+  MS_PER_DAY,
+  MS_PER_MINUTE,
+  type Zone,
+  isFacilityDate,
+} from './instant.ts'
 import { instantToMs } from './instant-arithmetic.ts'
 
 const formatters = new Map<Zone, Intl.DateTimeFormat>()
@@ -36,13 +43,40 @@ export function isZone(zone: string): boolean {
 
 /** What a wall clock in the zone shows: `2026-03-28` and `14:05:00`. */
 export function wallClockOf(instant: Instant, zone: Zone): { date: FacilityDate; time: string } {
+  const ms = instantToMs(instant)
+  const shown =
+    ms >= wholeMinutesSinceMs && ms < wholeMinutesUntilMs
+      ? new Date(ms + offsetInMinute(Math.floor(ms / MS_PER_MINUTE), zone)).toISOString()
+      : readWallClock(ms, zone)
+  const [date = '', time = ''] = shown.split('T')
+  return { date, time: time.slice(0, 8) }
+}
+
+/** The wall clock as the zone's formatter writes it: `2026-03-28T14:05:00`. */
+function readWallClock(ms: number, zone: Zone): string {
   const parts: Record<string, string> = {}
-  for (const part of formatterOf(zone).formatToParts(instantToMs(instant))) parts[part.type] = part.value
+  for (const part of formatterOf(zone).formatToParts(ms)) parts[part.type] = part.value
   const year = (parts.year ?? '').padStart(4, '0')
-  return {
-    date: `${year}-${parts.month}-${parts.day}`,
-    time: `${parts.hour}:${parts.minute}:${parts.second}`,
-  }
+  return `${year}-${parts.month}-${parts.day}T${parts.hour}:${parts.minute}:${parts.second}`
+}
+
+// Since February 1972 no zone has been off UTC by part of a minute, nor changed within one (IANA time zone database)
+const wholeMinutesSinceMs = Date.UTC(1972, 1, 1)
+const wholeMinutesUntilMs = Date.UTC(9999, 0, 1)
+const mostKept = 50_000
+const keptOffsets = new Map<Zone, Map<number, number>>()
+
+/** How far the zone is ahead of UTC, in milliseconds; kept, because a board asks for the same instants again and again. */
+function offsetInMinute(minute: number, zone: Zone): number {
+  const ofZone = keptOffsets.get(zone) ?? new Map<number, number>()
+  keptOffsets.set(zone, ofZone)
+  const kept = ofZone.get(minute)
+  if (kept !== undefined) return kept
+  const startMs = minute * MS_PER_MINUTE
+  const offsetMs = Date.parse(`${readWallClock(startMs, zone)}Z`) - startMs
+  if (ofZone.size >= mostKept) ofZone.clear()
+  ofZone.set(minute, offsetMs)
+  return offsetMs
 }
 
 /**

@@ -55,6 +55,21 @@ describe('what counts as an instant or a date', () => {
           expect(isFacilityDate(text), text).toBe(has)
         }
   })
+  it('shows the clock that the machine shows in every zone it knows, before and after offsets had seconds', () => {
+    const anInstant = fc.integer({ min: Date.UTC(1900, 0, 1), max: Date.UTC(2060, 0, 1) })
+    const aZone = fc.constantFrom(...Intl.supportedValuesOf('timeZone'))
+    fc.assert(
+      fc.property(anInstant, aZone, (ms, timeZone) => {
+        const shown = new Intl.DateTimeFormat('sv-SE', { timeZone, dateStyle: 'short', timeStyle: 'medium' })
+        // asked twice: the second answer is a kept one
+        for (const at of [ms, ms + 1, ms]) {
+          const { date, time } = wallClockOf(new Date(at).toISOString(), timeZone)
+          expect(`${date} ${time}`).toBe(shown.format(at))
+        }
+      }),
+      { numRuns: 600 },
+    )
+  })
   it('knows zones by name', () => {
     expect(isZone('Europe/Lisbon')).toBe(true)
     expect(isZone('Harrow/Point')).toBe(false)
