@@ -112,7 +112,7 @@ describe('every sheet with the practice data, in the hand and at the desk', () =
         await expectAccessible(page, sheet.name)
       }
     },
-    180_000,
+    300_000,
   )
 })
 
@@ -131,6 +131,6 @@ describe('every sheet in longer words, and from right to left', () => {
         await expectNarrowerThan(hand.width, page, `${sheet.name} from right to left`)
       }
     },
-    180_000,
+    300_000,
   )
 })
