@@ -225,7 +225,7 @@ export async function seedOrders(
   async function dose(number: string, order: DemoOrder, lotId: string): Promise<void> {
     const startedAt = hours(order.startHours)
     clock.set(new Date(startedAt.getTime() + 10 * 60_000))
-    const sheet = await administrations.queries.sheet(number, '1', false, people.tech)
+    const sheet = await administrations.queries.sheet(number, '1', false, as('tech'))
     const doseId = parts.ids.next()
     await administrations.service.recordDose(as('tech'), number, '1', {
       id: doseId,

@@ -9,6 +9,7 @@ import { Orders1764600000013 } from './0013-orders.ts'
 import { Notices1764600000014 } from './0014-notices.ts'
 import { Handover1764600000016 } from './0016-handover.ts'
 import { LotLooks1764600000019 } from './0019-lot-looks.ts'
+import { AmountsSeen1764600000023 } from './0023-amounts-seen.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -24,4 +25,5 @@ export const migrations = [
   Notices1764600000014,
   Handover1764600000016,
   LotLooks1764600000019,
+  AmountsSeen1764600000023,
 ]

@@ -155,8 +155,11 @@ export const BathSheet = z.object({
   second: Calculation.extend({
     agrees: z.boolean().describe('Agrees with the first'),
     differs: z
-      .array(z.enum(['enclosure', 'lot', 'strength', 'amount']))
+      .array(z.enum(['enclosure', 'mark', 'lot', 'strength', 'amount']))
       .describe('What does not agree with the first calculation, the order or the label'),
+    markCompared: z
+      .boolean()
+      .describe('A depth or fill mark is on file, and the mark read was compared with it'),
     differencePercent: z
       .number()
       .nullable()
@@ -164,6 +167,10 @@ export const BathSheet = z.object({
   })
     .nullable()
     .describe('Newest second calculation for this dose'),
+  secondShut: z
+    .enum(['may-not', 'no-first', 'same-person', 'amount-seen', 'begin-again'])
+    .nullable()
+    .describe('Why the person who asks cannot calculate a second time now; null when they can'),
   mayStart: z.boolean().describe('Nothing stands in the way of giving it now'),
   why: z.array(z.string()).describe('What stands in the way'),
   recorded: z.array(RecordedDose).describe('Records of this dose'),
@@ -178,7 +185,12 @@ export const getBathSheet = contract({
   action: 'dose.record',
   summary: 'One planned dose, judged now: conditions, amounts, calculations, records',
   params: doseParams,
-  query: z.strictObject({ blind: z.enum(['yes']).optional().describe('Leave every amount out') }),
+  query: z.strictObject({
+    blind: z
+      .enum(['yes'])
+      .optional()
+      .describe('Leave every amount out; whoever asks for them is no blind second person any more'),
+  }),
   reply: { 200: BathSheet },
   problems: ['not-found'],
 })
@@ -224,7 +236,14 @@ export const calculateSecond = contract({
     amount: EnteredQuantity.describe('Amount as worked out by the second person'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'another-person-needed', 'first-calculation-missing'],
+  problems: [
+    'not-found',
+    'id-already-used',
+    'another-person-needed',
+    'first-calculation-missing',
+    'calculations-begin-again',
+    'bad-input',
+  ],
   idempotent: 'by-record-id',
 })
 
@@ -302,7 +321,10 @@ export const listDueDoses = contract({
             latestAt: Instant.describe('End of its window'),
             enclosureCode: z.string().describe('Enclosure'),
             drug: z.string().describe('Drug'),
-            amountText: z.string().nullable().describe('Signed amount'),
+            amountText: z
+              .string()
+              .nullable()
+              .describe('Signed amount; withheld where a second person is to work it out blind'),
             state: z.enum(['due', 'late', 'running', 'held']).describe('Where it stands'),
           }),
         )

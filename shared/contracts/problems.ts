@@ -81,6 +81,7 @@ export const problemStatus = {
   'not-held': 409,
   'dose-not-possible': 409,
   'first-calculation-missing': 409,
+  'calculations-begin-again': 409,
   'case-ended': 409,
   'already-closed': 409,
   'already-in-a-case': 409,

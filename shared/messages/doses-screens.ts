@@ -36,6 +36,8 @@ export const sheetWords = defineMessages({
   amount: 'Amount',
   amountSigned: 'signed',
   amountNow: 'for the water now',
+  amountLater:
+    'The amount is shown to whoever makes the first calculation, and to everybody once the two agree.',
   amountNone: 'No amount can be worked out for the water as it is now.',
   noDrift: 'The volume is the one of the signature.',
   driftWithin: (p: { percent: string }) =>
@@ -68,7 +70,10 @@ export const sheetWords = defineMessages({
   secondNotNeeded: 'No second calculation is needed for this dose.',
   secondAgrees: (p: { by: string; at: string; amount: string }) =>
     `${p.by}, ${p.at}: ${p.amount}. The two agree.`,
-  secondDiffers: (p: { by: string; at: string }) => `${p.by}, ${p.at}: the two do not agree.`,
+  secondDiffers: (p: { by: string; at: string }) =>
+    `${p.by}, ${p.at}: the two do not agree. Nothing is given. Both begin again from the label.`,
+  markNotCompared:
+    'No depth or fill mark of this water is on file, so the mark read was compared with nothing.',
   lookAgain: 'Look again',
   inTheWay: 'Stands in the way',
   conditionsOpen: (p: { count: number }) =>
@@ -172,6 +177,7 @@ export const secondWords = defineMessages({
     'You work the amount out by yourself: from the label on the enclosure, the mark in the water and the container in your hand. The first result is not on this screen.',
   enclosure: '1. Enclosure, from its label',
   mark: '2. Depth or fill mark that you see',
+  markHint: 'With its unit, for example 0.68 m.',
   strength: '3. Strength, from the container',
   lot: '4. Lot number, from the container',
   amount: '5. Amount that you work out',
@@ -179,6 +185,12 @@ export const secondWords = defineMessages({
   readFirst: 'Fill in 1 to 4 first.',
   typeAmount: 'Type the amount that you worked out.',
   act: 'Compare with the first',
+  amountSeen: 'You have seen the amount',
+  amountSeenBody:
+    'Your calculation would not be blind. Somebody who has not seen it makes the second: a veterinarian, technician or keeper.',
+  beginAgain: 'Both begin again',
+  beginAgainBody:
+    'The first is worked out anew, from the label and the container in the hand. This page opens again by itself when it is there.',
   samePerson: 'You made the first calculation',
   samePersonBody:
     'The second has to be another person’s: any veterinarian, technician or keeper who signs in under their own name.',
@@ -189,6 +201,8 @@ export const secondWords = defineMessages({
   differs: 'The two do not agree. Nothing is given.',
   differsBody: 'Both of you begin again from the label. The first result stays hidden.',
   enclosureDiffers: 'The enclosure that you read is not the one of the order. Look at its label again.',
+  markDiffers:
+    'The mark that you read is not the depth or fill mark on file. Look at the water again; if it stands where you read it, the volume has to be determined anew.',
   lotDiffers: 'The lot that you read is not the one of the first calculation. Read the container again.',
   strengthDiffers:
     'The strength that you read is not the one on file for this product. Read the container again.',
@@ -196,7 +210,8 @@ export const secondWords = defineMessages({
     'The amounts differ by more than 2 % and more than one step of the balance. Look at decimal point, unit and volume.',
   agrees: 'The two calculations agree.',
   whole: 'I do not calculate: show the whole sheet',
-  wholeNote: 'Then somebody else has to make the second calculation.',
+  wholeNote:
+    'Whoever looks at the amounts is remembered. Then somebody else has to make the second calculation.',
   by: (p: { by: string; at: string }) => `First calculation: ${p.by}, ${p.at}`,
 })
 

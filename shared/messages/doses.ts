@@ -12,6 +12,12 @@ export const doseWords = defineMessages({
     `The volume has moved by ${p.percent} since the signature; the order allows ${p.allowed}. A veterinarian amends the order.`,
   secondMissing: 'Another person has to calculate the amount without seeing yours.',
   secondDisagrees: 'The two calculations do not agree. Both begin again from the label.',
+  firstMissing: 'Ask the first person to calculate.',
+  samePerson: 'The second calculation is another person’s.',
+  amountSeen:
+    'You have been shown the amount of this dose, so your calculation would not be blind. Ask somebody who has not seen it.',
+  beginAgain: 'The first is worked out anew before the second. Then both begin again from the label.',
+  markUnreadable: 'Type the depth as a number with its unit, for example 0.68 m.',
   secondOutdated: 'The lot or the volume has changed since the second calculation. Calculate again.',
   amountDiffers: (p: { amount: string }) =>
     `The amount has to be ${p.amount}, within one step of the balance.`,

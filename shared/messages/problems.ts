@@ -39,6 +39,7 @@ export const problemTitles = defineMessages({
   'order-ended': 'This order has ended',
   'dose-not-possible': 'This dose cannot be given now',
   'first-calculation-missing': 'The first calculation is not there yet',
+  'calculations-begin-again': 'The two calculations did not agree',
   'not-held': 'Nothing is held here',
   'print-busy': 'Too much is being printed at once',
   'print-failed': 'This cannot be printed as it stands',

@@ -57,6 +57,7 @@ export interface CalculationReadRow {
   lot_id: string | null
   lot_number: string | null
   enclosure_read: string | null
+  mark_read: string | null
   lot_read: string | null
   strength_entered_value: string | null
   strength_entered_unit: string | null
@@ -78,13 +79,23 @@ export function readCalculations(
 ): Promise<CalculationReadRow[]> {
   return db.query(
     `SELECT c.id, c.part, c.lot_id, t.lot_number, c.amount_entered_value, c.amount_entered_unit, c.net_volume_litres,
-            c.enclosure_read, c.lot_read, c.strength_entered_value, c.strength_entered_unit, c.agrees, c.difference_percent, c.recorded_at, c.recorded_by, p.printed_name AS by_name
+            c.enclosure_read, c.mark_read, c.lot_read, c.strength_entered_value, c.strength_entered_unit, c.agrees,
+            c.difference_percent, c.recorded_at, c.recorded_by, p.printed_name AS by_name
        FROM dose_calculations c
        JOIN people p ON p.id = c.recorded_by
        LEFT JOIN product_lots t ON t.id = c.lot_id
-      WHERE c.order_version_id = $1 AND c.dose_key = $2 ORDER BY c.recorded_at DESC`,
+      WHERE c.order_version_id = $1 AND c.dose_key = $2 ORDER BY c.recorded_at DESC, c.id DESC`,
     [orderVersionId, doseKey],
   )
+}
+
+/** People who were shown the amount of a dose before its two calculations agreed. */
+export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
+  const rows: { person_id: string }[] = await db.query(
+    `SELECT s.person_id FROM dose_amounts_seen s WHERE s.order_version_id = $1 AND s.dose_key = $2`,
+    [orderVersionId, doseKey],
+  )
+  return rows.map((row) => row.person_id)
 }
 
 export async function readOrderNumberOfDose(db: Db, doseId: string) {

@@ -19,6 +19,19 @@ export function insertStop(tx: Tx, row: BathStopRow): Promise<{ created: boolean
   return insertOnce(tx, BathStopRow, row, ['doseId', 'cause'])
 }
 
+/** Notes once that a person was shown the amount; true when it is new. */
+export async function insertSeen(
+  tx: Tx,
+  row: { id: string; orderVersionId: string; doseKey: string; personId: string },
+): Promise<boolean> {
+  const rows: unknown[] = await tx.manager.query(
+    `INSERT INTO dose_amounts_seen (id, order_version_id, dose_key, person_id, recorded_at)
+     VALUES ($1, $2, $3, $4, $5) ON CONFLICT ON CONSTRAINT uq_dose_amounts_seen_person DO NOTHING RETURNING id`,
+    [row.id, row.orderVersionId, row.doseKey, row.personId, tx.at],
+  )
+  return rows.length > 0
+}
+
 /** The newest calculation of a part for one dose; null when there is none. */
 export function newestCalculation(
   tx: Tx,

@@ -3,13 +3,13 @@ import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
-import type { Actor } from '../../platform/http/request-context.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { SheetPrinter } from './print-sheet.ts'
 import type { AdministrationsService } from './administrations.service.ts'
 
 export interface AdministrationsQueries {
-  sheet(number: string, key: string, blind: boolean, actor: Actor): Promise<BathSheet>
-  sheetOfDose(doseId: string, actor: Actor): Promise<BathSheet>
+  sheet(number: string, key: string, blind: boolean, context: RequestContext): Promise<BathSheet>
+  sheetOfDose(doseId: string, context: RequestContext): Promise<BathSheet>
   due(query: QueryOf<typeof contracts.listDueDoses>): Promise<ReplyOf<typeof contracts.listDueDoses>['rows']>
 }
 
@@ -21,32 +21,32 @@ export function administrationRoutes(
   return [
     route(contracts.listDueDoses, async ({ query }) => ({ rows: await queries.due(query) })),
     route(contracts.getBathSheet, ({ params, query, context }) =>
-      queries.sheet(params.number, params.key, query.blind === 'yes', context.actor),
+      queries.sheet(params.number, params.key, query.blind === 'yes', context),
     ),
     route(contracts.printBathSheet, async ({ params, context }) => ({
       contentType: 'application/pdf',
       fileName: `${params.number}-dose-${params.key}.pdf`,
-      body: await print(params.number, params.key, context.actor, context.requestId),
+      body: await print(context, params.number, params.key),
     })),
     route(contracts.calculateFirst, async ({ params, body, context }) => {
       await service.calculateFirst(context, params.number, params.key, body)
-      return queries.sheet(params.number, params.key, false, context.actor)
+      return queries.sheet(params.number, params.key, false, context)
     }),
     route(contracts.calculateSecond, async ({ params, body, context }) => {
       await service.calculateSecond(context, params.number, params.key, body)
-      return queries.sheet(params.number, params.key, true, context.actor)
+      return queries.sheet(params.number, params.key, true, context)
     }),
     route(contracts.giveDose, async ({ params, body, context }) => {
       await service.giveDose(context, params.number, params.key, body)
-      return queries.sheet(params.number, params.key, false, context.actor)
+      return queries.sheet(params.number, params.key, false, context)
     }),
     route(contracts.recordDose, async ({ params, body, context }) => {
       await service.recordDose(context, params.number, params.key, body)
-      return queries.sheet(params.number, params.key, false, context.actor)
+      return queries.sheet(params.number, params.key, false, context)
     }),
     route(contracts.stopBath, async ({ params, body, context }) => {
       await service.stopBath(context, params.doseId, body)
-      return queries.sheetOfDose(params.doseId, context.actor)
+      return queries.sheetOfDose(params.doseId, context)
     }),
   ]
 }

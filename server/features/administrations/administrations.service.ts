@@ -16,6 +16,7 @@ import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
 import { isAmountNow, obstacles } from './judge-dose.ts'
+import { firstOf, secondOf } from './second-person.ts'
 import { concentrationGiven, exceptionsOf, judgeAmount } from './judge-record.ts'
 
 interface DoseToWrite {
@@ -129,7 +130,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const measured = situation.judgement?.dose?.measured
         if (measured && !isAmountNow(situation, amount))
           why.push(doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }))
-        const first = calculations.find((one) => one.part === 'first')
+        const first = firstOf(calculations)
         if (first && first.lot_id !== given.lotId) why.push(doseWords.secondOutdated)
         if (why.length > 0) throw new Problem('dose-not-possible', { detail: why.join(' '), extra: { why } })
         await writeDose(tx, situation, {
@@ -139,7 +140,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           amount,
           lotId: given.lotId,
           note: given.note ?? null,
-          secondCalculationId: calculations.find((one) => one.part === 'second')?.id ?? null,
+          secondCalculationId: secondOf(calculations)?.id ?? null,
         })
       })
     },

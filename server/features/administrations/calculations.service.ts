@@ -1,21 +1,42 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/doses.contract.ts'
-import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+import { judgeMark } from '../../../shared/domain/dose/judge-mark.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import * as repository from './administrations.repository.ts'
-import { compareCalculations } from './compare-calculations.ts'
+import { compareCalculations, comparedWith } from './compare-calculations.ts'
 import { lockAndRead, personOf, refuseGiver, subjectOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { goneOf } from './dose-situation.ts'
+import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered, strengthEntered } from './entered-amounts.ts'
-import { divisionOf } from './judge-dose.ts'
+import { firstOf, secondRefusal, secondShut } from './second-person.ts'
+
+const allowedDrift = ({ content }: DoseSituation) => content.fields.allowedVolumeDriftPercent
 
 /** The two calculations of one dose: the first for the lot in the hand, the second by another person, blind. */
 export function createCalculations(parts: AdministrationsParts) {
   return {
+    /** Remembers that somebody was shown the amount before the two calculations agreed. */
+    async noteSeen(
+      context: RequestContext,
+      seen: { orderVersionId: string; doseKey: string; order: { id: string; number: string } },
+    ): Promise<void> {
+      await parts.transactions.inTransaction(context, async (tx) => {
+        const { orderVersionId, doseKey } = seen
+        const row = { id: parts.ids.next(), orderVersionId, doseKey, personId: personOf(tx) }
+        if (await repository.insertSeen(tx, row))
+          tx.audit({
+            action: 'dose.see-amount',
+            subject: { kind: 'order', id: seen.order.id, label: seen.order.number },
+            after: { key: doseKey },
+          })
+      })
+    },
+
     /** Works the amount out for the water as it is now and the lot in the hand. */
     async calculateFirst(
       context: RequestContext,
@@ -77,38 +98,31 @@ export function createCalculations(parts: AdministrationsParts) {
       const strength = strengthEntered(given.strengthRead, '/strengthRead')
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at })
-        const first = (await parts.calculations(situation.versionId, key, tx)).find(
-          (one) => one.part === 'first',
-        )
-        if (!first)
-          throw new Problem('first-calculation-missing', { detail: 'Ask the first person to calculate.' })
-        if (first.recorded_by === personOf(tx))
-          throw new Problem('another-person-needed', {
-            detail: 'The second calculation is another person’s.',
-          })
-        const firstAmount = {
-          value: first.amount_entered_value,
-          unit: first.amount_entered_unit as Quantity['unit'],
-        }
-        const { differs, agreement } = compareCalculations(
-          {
-            enclosureCode: situation.content.enclosure.code,
-            lotNumber: first.lot_number ?? '',
-            strength: situation.product && (situation.product.strength as Quantity),
-            amount: firstAmount,
-            division: divisionOf(situation.content),
-          },
-          { enclosureRead: given.enclosureRead, lotRead: given.lotRead, strength, amount },
-        )
+        const calculations = await parts.calculations(situation.versionId, key, tx)
+        // sent again: the answer is the one of the first time
+        if (calculations.all.some((one) => one.id === given.id && one.part === 'second')) return
+        const shut = secondShut(calculations, context.actor)
+        const first = firstOf(calculations)
+        if (shut !== null || !first) throw secondRefusal(shut ?? 'no-first')
+        const { enclosureRead, markRead, lotRead } = given
+        if (judgeMark(markRead, situation.marks, allowedDrift(situation)) === 'unreadable')
+          throw refusedInput('/markRead', doseWords.markUnreadable, 'mark-unreadable')
+        const { differs, agreement } = compareCalculations(comparedWith(situation, first), {
+          enclosureRead,
+          markRead,
+          lotRead,
+          strength,
+          amount,
+        })
         const agrees = differs.length === 0
         const { created } = await repository.insertCalculation(tx, {
           id: given.id,
           orderVersionId: situation.versionId,
           doseKey: key,
           part: 'second',
-          enclosureRead: given.enclosureRead,
-          markRead: given.markRead,
-          lotRead: given.lotRead,
+          enclosureRead,
+          markRead,
+          lotRead,
           lotId: first.lot_id,
           strengthEnteredValue: strength.value,
           strengthEnteredUnit: strength.unit,
@@ -128,8 +142,9 @@ export function createCalculations(parts: AdministrationsParts) {
               key,
               agrees,
               amount: { ...amount },
-              enclosureRead: given.enclosureRead,
-              lotRead: given.lotRead,
+              enclosureRead,
+              markRead,
+              lotRead,
               differs,
             },
             clinical: true,

@@ -1,14 +1,21 @@
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
 import type { Agreement } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { judgeMark } from '../../../shared/domain/dose/judge-mark.ts'
+import type { MarksOnFile } from '../../../shared/domain/dose/judge-mark.ts'
 import { convert } from '../../../shared/domain/units/convert.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+import type { CalculationReadRow } from './administrations.reads.ts'
+import type { DoseSituation } from './dose-situation.ts'
+import { divisionOf } from './judge-dose.ts'
 
 export type Difference = NonNullable<BathSheet['second']>['differs'][number]
 
 export interface SecondReading {
   enclosureRead: string
+  markRead: string
   lotRead: string
   strength: Quantity
   amount: Quantity
@@ -21,6 +28,8 @@ export interface FirstCalculation {
   strength: Quantity | null
   amount: Quantity
   division: Quantity
+  marks: MarksOnFile
+  allowedDriftPercent: number
 }
 
 const sameText = (a: string, b: string) => a.trim().toLowerCase() === b.trim().toLowerCase()
@@ -43,8 +52,22 @@ export function compareCalculations(
   const agreement = secondCalculationAgrees(first.amount, second.amount, first.division)
   const differs: Difference[] = []
   if (!sameText(second.enclosureRead, first.enclosureCode)) differs.push('enclosure')
+  if (judgeMark(second.markRead, first.marks, first.allowedDriftPercent) === 'differs') differs.push('mark')
   if (!sameText(second.lotRead, first.lotNumber)) differs.push('lot')
   if (first.strength && !sameStrength(second.strength, first.strength)) differs.push('strength')
   if (!agreement.ok || !agreement.value.agrees) differs.push('amount')
   return { differs, agreement: agreement.ok ? agreement.value : null }
+}
+
+/** What the second calculation is compared with: the first, the order and what is on file of product and water. */
+export function comparedWith(situation: DoseSituation, first: CalculationReadRow): FirstCalculation {
+  return {
+    enclosureCode: situation.content.enclosure.code,
+    lotNumber: first.lot_number ?? '',
+    strength: situation.product && (situation.product.strength as Quantity),
+    amount: { value: first.amount_entered_value, unit: first.amount_entered_unit as UnitCode },
+    division: divisionOf(situation.content),
+    marks: situation.marks,
+    allowedDriftPercent: situation.content.fields.allowedVolumeDriftPercent,
+  }
 }

@@ -4,17 +4,19 @@ import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
+import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
-import type { CalculationReadRow } from './administrations.reads.ts'
 import * as repository from './administrations.repository.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import type { DoseSituation, DoseSituationParts } from './dose-situation.ts'
+import type { Calculations } from './second-person.ts'
 
 export interface AdministrationsParts extends DoseSituationParts {
   transactions: Transactions
   clock: Clock
   facility: FacilityService
-  calculations(versionId: string, key: string, tx: Tx): Promise<CalculationReadRow[]>
+  calculations(versionId: string, key: string, tx: Tx): Promise<Calculations>
+  ids: Ids
 }
 
 /** The order as the audit trail names it. */

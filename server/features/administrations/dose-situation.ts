@@ -5,15 +5,18 @@ import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts
 import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import type { CautionAnswer } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
+import type { MarksOnFile } from '../../../shared/domain/dose/judge-mark.ts'
 import type { Drift } from '../../../shared/domain/dose/check-drift.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { known } from '../../../shared/domain/cautions/fact.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Animals } from '../animals/index.ts'
+import { placeReads } from '../enclosures/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
 import { readDoses } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
@@ -37,6 +40,8 @@ export interface DoseSituation {
   judgement: OrderJudgement | null
   answer: CautionAnswer | null
   drift: Drift | null
+  /** What is on file of how high the water stands. */
+  marks: MarksOnFile
   /** The animals that the order names; `isHere` null while the water cannot be read. */
   treated: { animalId: string; name: string; isHere: boolean | null }[]
   /** Records of the order's doses that a veterinarian has yet to explain. */
@@ -82,6 +87,13 @@ function withSpacing(
     ...facts,
     order: { ...facts.order, dosesGiven, spacing: known(spacing, null, 'the doses recorded here') },
   }
+}
+
+async function readFillMark(db: Db, enclosureId: string): Promise<MarksOnFile['fillMark']> {
+  const row = await placeReads.readEnclosure(db, { id: enclosureId })
+  if (!row || row.fill_mark_entered_value === null || row.fill_mark_entered_unit === null) return null
+  const volume = { value: row.fill_mark_entered_value, unit: row.fill_mark_entered_unit as UnitCode }
+  return { mark: row.fill_mark ?? '', volume }
 }
 
 /** The animals that the signature names, and whether they are among those in the water. */
@@ -160,6 +172,10 @@ export async function readDoseSituation(
         factsAtSigning: content.facts as unknown as CautionFacts,
       }),
     drift: drift?.ok ? drift.value : null,
+    marks: {
+      depths: found?.situation.water.volume?.depths ?? [],
+      fillMark: await readFillMark(db, fields.enclosureId),
+    },
     treated: treatedOf(content, found && found.situation.animals.map(({ animalId }) => animalId)),
     unexplained: await parts.animals.questions.openDiscrepanciesOfDoses(
       records.map(({ id }) => id),

@@ -30,7 +30,7 @@ export async function findDueDoses(
   const byOrder = new Map<string, DoseReadRow[]>()
   for (const record of all) byOrder.set(record.order_id, [...(byOrder.get(record.order_id) ?? []), record])
   const found: DueDose[] = []
-  for (const { row, plan } of orders) {
+  for (const { row, plan, secondCalculation } of orders) {
     const records = byOrder.get(row.id) ?? []
     const { planned } = plan
     const states = listDoseStates(planned, records.map(recordOf), { timed: plan.timed, ended: false }, now)
@@ -45,7 +45,8 @@ export async function findDueDoses(
         latestAt: dose.closesAt,
         enclosureCode: row.enclosureCode,
         drug: row.agent ? agentNames[row.agent] : '',
-        amountText: row.amountText,
+        // nobody is to know the amount beforehand who may be the second to work it out
+        amountText: secondCalculation ? null : row.amountText,
         state:
           state === 'running' ? 'running' : row.phase === 'held' ? 'held' : state === 'late' ? 'late' : 'due',
       })

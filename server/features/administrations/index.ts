@@ -1,4 +1,6 @@
 import { Problem } from '../../platform/http/problem.ts'
+import type { Db } from '../../platform/database/db.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Animals } from '../animals/index.ts'
@@ -6,18 +8,25 @@ import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { OpenOrder, Orders } from '../orders/index.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
-import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
+import { readCalculations, readOrderNumberOfDose, readSeenBy } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
 import { BathStopRow, DoseCalculation, DoseRow } from './dose.entity.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
-import { presentSheet } from './present-sheet.ts'
+import { presentSheet, showsAmountEarly } from './present-sheet.ts'
+import { firstOf } from './second-person.ts'
+import type { Calculations } from './second-person.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow]
+
+async function calculationsOf(db: Db, versionId: string, key: string): Promise<Calculations> {
+  const all = await readCalculations(db, versionId, key)
+  return { all, seenBy: await readSeenBy(db, versionId, key) }
+}
 
 export function createAdministrations(
   parts: Parts & {
@@ -33,28 +42,35 @@ export function createAdministrations(
   const service = createAdministrationsService({
     ...parts,
     ...outside,
-    calculations: (versionId, key, tx) => readCalculations(tx.manager, versionId, key),
+    calculations: (versionId, key, tx) => calculationsOf(tx.manager, versionId, key),
   })
   const now = () => clock.now()
   /** A dose as it stands, worked out for the lot in the hand once there is a first calculation. */
   async function read(number: string, key: string) {
     const situation = await readDoseSituation(outside, number, key, now())
-    const calculations = await readCalculations(dataSource, situation.versionId, key)
-    const lotId = calculations.find((one) => one.part === 'first')?.lot_id ?? null
+    const calculations = await calculationsOf(dataSource, situation.versionId, key)
+    const lotId = firstOf(calculations)?.lot_id ?? null
     if (lotId === null || lotId === situation.content.fields.lotId) return { situation, calculations }
     return { situation: await readDoseSituation(outside, number, key, now(), { lotId }), calculations }
   }
-  const print = createSheetPrinter({ ...parts, documents: parts.documents.service, read })
+  /** The sheet for somebody. Whoever is shown the amount before the two calculations agree is remembered. */
+  async function sheetFor(context: RequestContext, number: string, key: string, blind: boolean) {
+    const found = await read(number, key)
+    const sheet = presentSheet({ ...found, blind, actor: context.actor, now: now().toISOString() })
+    const { versionId, row } = found.situation
+    if (showsAmountEarly(sheet, found.calculations))
+      await service.noteSeen(context, { orderVersionId: versionId, doseKey: key, order: row })
+    return { ...found, sheet }
+  }
+  const print = createSheetPrinter({ ...parts, documents: parts.documents.service, sheetFor })
   parts.documents.prints.answerFor(sheetPrintKind, orders.answerForPrint)
   const due = { dataSource, queries: orders.queries, now }
   const queries: AdministrationsQueries = {
-    async sheet(number, key, blind, actor) {
-      return presentSheet({ ...(await read(number, key)), blind, actor, now: now().toISOString() })
-    },
-    async sheetOfDose(doseId, actor) {
+    sheet: async (number, key, blind, context) => (await sheetFor(context, number, key, blind)).sheet,
+    async sheetOfDose(doseId, context) {
       const found = await readOrderNumberOfDose(dataSource, doseId)
       if (!found) throw new Problem('not-found')
-      return queries.sheet(found.number, found.key, false, actor)
+      return queries.sheet(found.number, found.key, false, context)
     },
     due: (query) => findDueDoses(due, query),
   }

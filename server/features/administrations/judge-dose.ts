@@ -8,20 +8,14 @@ import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import type { SignedOrder } from '../orders/index.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
+import { firstOf, secondOf, secondStands } from './second-person.ts'
+import type { Calculations } from './second-person.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 
 /** Smallest step of the balance of an order; a hundredth of a gram where it names none. */
 export const divisionOf = ({ fields }: SignedOrder): Quantity =>
   (fields.division as Quantity | null) ?? { value: '0.01', unit: 'g' }
-
-/** Whether the newest second calculation is one for the newest first one, and agrees. */
-export function secondStands(
-  first: CalculationReadRow | undefined,
-  second: CalculationReadRow | undefined,
-): boolean {
-  return first !== undefined && second?.agrees === true && second.recorded_at >= first.recorded_at
-}
 
 /** Whether an amount is the one worked out, within two percent or one step of the balance. */
 export function isAmountNow(situation: DoseSituation, amount: Quantity): boolean {
@@ -64,7 +58,7 @@ export function overrideFor(content: SignedOrder, caution: Caution): SignedOrder
 }
 
 /** Everything that stands in the way of giving the dose now, in words. */
-export function obstacles(situation: DoseSituation, calculations: readonly CalculationReadRow[]): string[] {
+export function obstacles(situation: DoseSituation, calculations: Calculations): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
   const why: string[] = []
   if (block.state !== 'intact') why.push(doseWords.notIntact)
@@ -87,12 +81,12 @@ export function obstacles(situation: DoseSituation, calculations: readonly Calcu
     if (caution.level === 'stop' && !overrideFor(content, caution))
       why.push(`${sayCaution(caution, zone).title}. ${sayCaution(caution, zone).text}`)
   if (needsSecond(situation)) {
-    const first = calculations.find((one) => one.part === 'first')
-    const second = calculations.find((one) => one.part === 'second')
+    const first = firstOf(calculations)
+    const second = secondOf(calculations)
     if (!first || !second) why.push(doseWords.secondMissing)
     else if (second.recorded_at < first.recorded_at || firstIsOutdated(situation, first))
       why.push(doseWords.secondOutdated)
-    else if (!secondStands(first, second)) why.push(doseWords.secondDisagrees)
+    else if (!secondStands(calculations)) why.push(doseWords.secondDisagrees)
   }
   return why
 }

@@ -16,10 +16,12 @@ import { workingLabels } from '../../../shared/messages/working.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { recordOf } from './administrations.reads.ts'
 import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts'
-import { compareCalculations } from './compare-calculations.ts'
+import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
-import { divisionOf, needsSecond, obstacles, overrideFor, secondStands } from './judge-dose.ts'
+import { needsSecond, obstacles, overrideFor } from './judge-dose.ts'
+import { firstOf, secondOf, secondShut, secondStands } from './second-person.ts'
+import type { Calculations } from './second-person.ts'
 
 type SheetCaution = RecordedDose['exceptions'][number]
 const mayBe: Action[] = ['dose.give', 'dose.record', 'dose.calculate-second', 'bath.stop', 'order.hold']
@@ -88,6 +90,7 @@ function presentSecond(
     mine,
     agrees: second.agrees ?? false,
     differs: first && second.agrees === false ? differsOf(situation, first, second) : [],
+    markCompared: situation.marks.depths.length > 0 || situation.marks.fillMark !== null,
     differencePercent: hide ? null : second.difference_percent,
   }
 }
@@ -97,22 +100,13 @@ function differsOf(situation: DoseSituation, first: CalculationReadRow, second: 
     value: value ?? '',
     unit: (unit ?? 'g') as UnitCode,
   })
-  const amountOf = (row: CalculationReadRow) => quantity(row.amount_entered_value, row.amount_entered_unit)
-  return compareCalculations(
-    {
-      enclosureCode: situation.content.enclosure.code,
-      lotNumber: first.lot_number ?? '',
-      strength: situation.product && (situation.product.strength as Quantity),
-      amount: amountOf(first),
-      division: divisionOf(situation.content),
-    },
-    {
-      enclosureRead: second.enclosure_read ?? '',
-      lotRead: second.lot_read ?? '',
-      strength: quantity(second.strength_entered_value, second.strength_entered_unit),
-      amount: amountOf(second),
-    },
-  ).differs
+  return compareCalculations(comparedWith(situation, first), {
+    enclosureRead: second.enclosure_read ?? '',
+    markRead: second.mark_read ?? '',
+    lotRead: second.lot_read ?? '',
+    strength: quantity(second.strength_entered_value, second.strength_entered_unit),
+    amount: quantity(second.amount_entered_value, second.amount_entered_unit),
+  }).differs
 }
 
 /** Why no dose may be given from the order: held, or ended by people or by time. */
@@ -158,14 +152,11 @@ function presentCalendar(
 
 function presentSteps(
   situation: DoseSituation,
-  calculations: readonly CalculationReadRow[],
+  calculations: Calculations,
   zone: string,
 ): BathSheet['steps'] {
   const fired = new Map((situation.answer?.cautions ?? []).map((one) => [one.ruleId as string, one]))
-  const agreed = secondStands(
-    calculations.find((one) => one.part === 'first'),
-    calculations.find((one) => one.part === 'second'),
-  )
+  const agreed = secondStands(calculations)
   return situation.content.conditions.map((condition) => {
     const caution = fired.get(condition.ruleId)
     const { ruleId, level, text } = condition
@@ -232,7 +223,7 @@ function presentOverride(
 /** What a sheet is made from, the moment it is made for, and for whom. */
 export interface SheetRequest {
   situation: DoseSituation
-  calculations: readonly CalculationReadRow[]
+  calculations: Calculations
   blind: boolean
   actor: Actor
   now: string
@@ -247,10 +238,11 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
   const { fields } = content
   const zone = judgement?.facts.zone ?? 'UTC'
   const dose = judgement?.dose ?? null
-  const first = calculations.find((one) => one.part === 'first')
-  const second = calculations.find((one) => one.part === 'second')
+  const first = firstOf(calculations)
+  const second = secondOf(calculations)
   const own = records.filter((record) => record.dose_key === planned.key)
-  const hide = blind && own.length === 0 && !secondStands(first, second)
+  const hide = blind && own.length === 0 && !secondStands(calculations)
+  const hideLot = hide && first !== undefined
   const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
   const calendar = presentCalendar(situation.plan, records, course, now)
   const why = obstacles(situation, calculations)
@@ -270,14 +262,14 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     productName: content.product.productName,
     form: product?.form ?? null,
     treated: saidTreated(situation),
-    // the second person reads the lot from the container
-    lots: (hide ? [] : (product?.lots ?? [])).map(({ id, lotNumber, state, expiresOn }) => ({
+    // the second person reads the lot from the container; whoever works it out first chooses one
+    lots: (hideLot ? [] : (product?.lots ?? [])).map(({ id, lotNumber, state, expiresOn }) => ({
       id,
       lotNumber,
       state,
       expiresOn,
     })),
-    lotId: hide ? null : (first?.lot_id ?? fields.lotId),
+    lotId: hideLot ? null : (first?.lot_id ?? fields.lotId),
     targetText: `${content.targetText} ${content.basisText}`,
     contactMinutes: course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,
@@ -306,6 +298,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     secondNeeded: needsSecond(situation),
     first: presentFirst(first, hide, actor),
     second: presentSecond(situation, first, second, hide, actor),
+    secondShut: secondShut(calculations, actor),
     mayStart: why.length === 0,
     why,
     recorded: own.map((record) => presentRecord(record, records)),
@@ -339,6 +332,17 @@ function leftTheWater(situation: DoseSituation): BathSheet['cautions'] {
       overridden: null,
     },
   ]
+}
+
+/** Whether a sheet shows the amount of a dose whose second calculation is still to come. */
+export function showsAmountEarly(sheet: BathSheet, calculations: Calculations): boolean {
+  return (
+    !sheet.blind &&
+    sheet.secondNeeded &&
+    sheet.amountNow !== null &&
+    sheet.recorded.length === 0 &&
+    !secondStands(calculations)
+  )
 }
 
 /** What an order opens to keepers is feed and topical, so giving a bath is decided; who calculated first is not known here. */

@@ -1,15 +1,14 @@
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions } from '../../platform/database/transactions.ts'
-import type { Actor } from '../../platform/http/request-context.ts'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
 import { drawable } from '../../platform/pdf/drawable.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { DocumentsService } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { orderNotice } from '../orders/index.ts'
-import type { CalculationReadRow } from './administrations.reads.ts'
 import { bathSheetDocument } from './bath-sheet-document.ts'
 import type { DoseSituation } from './dose-situation.ts'
-import { presentSheet } from './present-sheet.ts'
 
 export const sheetPrintKind = 'bath-sheet'
 
@@ -19,16 +18,20 @@ export interface SheetPrintParts {
   pdf: PdfPool
   facility: FacilityService
   documents: DocumentsService
-  read(number: string, key: string): Promise<{ situation: DoseSituation; calculations: CalculationReadRow[] }>
+  sheetFor(
+    context: RequestContext,
+    number: string,
+    key: string,
+    blind: boolean,
+  ): Promise<{ situation: DoseSituation; sheet: BathSheet }>
 }
 
 /** Prints the bath sheet of a dose: judged now, noted under the fingerprint of the signed order it belongs to. */
 export function createSheetPrinter(parts: SheetPrintParts) {
-  return async (number: string, key: string, actor: Actor, requestId: string): Promise<Uint8Array> => {
+  return async (context: RequestContext, number: string, key: string): Promise<Uint8Array> => {
     const printedAt = parts.clock.now().toISOString()
-    const { situation, calculations } = await parts.read(number, key)
+    const { situation, sheet } = await parts.sheetFor(context, number, key, false)
     const { block, row, content } = situation
-    const sheet = presentSheet({ situation, calculations, blind: false, actor, now: printedAt })
     const model = bathSheetDocument({
       sheet: drawable(sheet),
       content: drawable(content),
@@ -36,11 +39,11 @@ export function createSheetPrinter(parts: SheetPrintParts) {
       notice: orderNotice({ block, row, superseded: false, versionNo: content.versionNo }),
       facility: await parts.facility.valueOf('facility.name'),
       paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
-      printedBy: actor.printedName,
+      printedBy: context.actor.printedName,
       printedAt,
     })
     const bytes = await parts.pdf.renderPdf(model)
-    await parts.transactions.inTransaction({ actor, requestId }, async (tx) => {
+    await parts.transactions.inTransaction(context, async (tx) => {
       await parts.documents.registerPrint(tx, {
         fingerprint: block.hash,
         kind: sheetPrintKind,

@@ -38,9 +38,6 @@ export async function gatherDoses(
   // Whoever may calculate a second time is shown no amount beforehand
   const isBlind = (row: { number: string; key: string }) =>
     blind.some((one) => one.number === row.number && one.dose_key === row.key)
-  // Nobody is to know the amount beforehand who may be the second to work it out
-  const wantsSecond = (number: string) =>
-    open.some(({ row, secondCalculation }) => row.number === number && secondCalculation)
   // Nothing is given under an order past its last window; it stands on the list as a whole
   const hasExpired = (number: string) =>
     open.some(({ row }) => row.number === number && row.phase === 'expired')
@@ -48,9 +45,7 @@ export async function gatherDoses(
     recent,
     items: [
       ...plannedItems(
-        due
-          .filter((row) => !isBlind(row) && !hasExpired(row.number))
-          .map((row) => (wantsSecond(row.number) ? { ...row, amountText: null } : row)),
+        due.filter((row) => !isBlind(row) && !hasExpired(row.number)),
         moment,
       ),
       ...recent.flatMap((row) => recordedItems(row, moment, mayStop)),

@@ -8,6 +8,8 @@ import { judgeReading } from '../../../shared/domain/readings/judge-reading.ts'
 import type { ReadingJudgement } from '../../../shared/domain/readings/judge-reading.ts'
 import type { PhScale, ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { Refusal } from '../../../shared/domain/result.ts'
+import { VolumeSheetBody } from '../../../shared/contracts/volume-sheet.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { placeReads } from '../enclosures/index.ts'
@@ -37,6 +39,8 @@ export interface VolumeFact {
   /** Why it does not hold, in codes; empty when it holds */
   mismatches: VolumeMismatch[]
   waterBodyIds: string[]
+  /** Depths of the water that it was worked out from, as entered; none where it was metered or stated */
+  depths: Quantity[]
   /** Set when it covers a part of the joined water, under a recorded and tested isolation */
   isolationId: string | null
 }
@@ -90,6 +94,15 @@ export interface WaterFacts {
   }[]
 }
 
+/** How deep the tanks and vessels of a determination were; sumps are left out, nobody doses by their level. */
+function depthsOf(inputs: string): Quantity[] {
+  const sheet = VolumeSheetBody.safeParse(JSON.parse(inputs))
+  if (!sheet.success || sheet.data.method !== 'geometry') return []
+  return sheet.data.parts.flatMap(({ role, shape }) =>
+    role !== 'sump' && 'depth' in shape ? [shape.depth as Quantity] : [],
+  )
+}
+
 function volumeFact(found: EnclosureWater): VolumeFact | null {
   const { row, usable, holds, isolationId } = found.volume
   if (!row) return null
@@ -107,6 +120,7 @@ function volumeFact(found: EnclosureWater): VolumeFact | null {
     holdsForThisValveState: holds,
     mismatches: holds ? [] : findVolumeMismatches(determinationOf(row, found.at), found.water),
     waterBodyIds: row.water_body_ids,
+    depths: depthsOf(row.inputs),
     isolationId: usable ? isolationId : row.isolation_id,
   }
 }

@@ -47,6 +47,7 @@ export const tableKinds: Record<string, TableKind> = {
   order_version_animals: 'sealed',
   order_events: 'ledger',
   dose_calculations: 'ledger',
+  dose_amounts_seen: 'ledger',
   doses: 'ledger',
   bath_stops: 'ledger',
   agent_experience: 'ledger',

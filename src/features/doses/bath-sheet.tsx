@@ -14,7 +14,7 @@ import { PhoneSheet } from '../../ui/phone-frame.tsx'
 import { HoldDialog } from './hold-dialog.tsx'
 import { sheetQuery } from './queries.ts'
 import { SecondCalculation } from './second-calculation.tsx'
-import { doseToOpen, othersMayAct, sheetMode } from './sheet-model.ts'
+import { doseToOpen, othersMayAct, sheetMode, waitsForOthers } from './sheet-model.ts'
 import type { SheetPart } from './sheet-model.ts'
 import { StopCriteria } from './sheet-parts.tsx'
 import { WholeSheet } from './whole-sheet.tsx'
@@ -28,7 +28,10 @@ const lookAgainMs = 5_000
  */
 export function BathSheet({ number, doseKey, part }: { number: string; doseKey: string; part: SheetPart }) {
   const { zone } = useMe().facility
-  const blind = useQuery(sheetQuery(number, doseKey, true))
+  const blind = useQuery({
+    ...sheetQuery(number, doseKey, true),
+    refetchInterval: ({ state }) => (state.data && waitsForOthers(state.data) ? lookAgainMs : false),
+  })
   const mode = blind.data ? sheetMode(blind.data, part) : null
   const whole = useQuery({
     ...sheetQuery(number, doseKey, false),

@@ -76,6 +76,7 @@ export function SecondStanding({ sheet, zone }: { sheet: BathSheet; zone: string
   return (
     <section className="stack" aria-live="polite">
       <h2 className="t-head">{words.second}</h2>
+      {isCurrent && !second.markCompared ? <p className="t-2">{words.markNotCompared}</p> : null}
       {isCurrent ? (
         <p className={second.agrees ? undefined : 'text-magenta t-strong'}>
           {second.agrees

@@ -17,7 +17,7 @@ import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useCalculateSecond } from './mutations.ts'
 import { emptySecond, hasReadAll, secondBody, secondIsOpen, strengthUnits } from './second-form-model.ts'
-import { amountUnits, secondIsShut } from './sheet-model.ts'
+import { amountUnits } from './sheet-model.ts'
 import { WhatGoesIn } from './sheet-parts.tsx'
 
 type Differs = NonNullable<BathSheet['second']>['differs'][number]
@@ -28,6 +28,7 @@ const unitOptions = (units: readonly string[]) =>
 const differsWords = (part: Differs) =>
   ({
     enclosure: words.enclosureDiffers,
+    mark: words.markDiffers,
     lot: words.lotDiffers,
     strength: words.strengthDiffers,
     amount: words.amountDiffers,
@@ -37,40 +38,63 @@ const differsWords = (part: Differs) =>
 export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const what = <WhatGoesIn sheet={sheet} zone={zone} />
   const { number, key, first } = sheet
-  const shut = secondIsShut(sheet)
+  const { secondShut } = sheet
   return (
     <>
       <p className="t-note">
         {first ? words.by({ by: first.by, at: sayMoment(first.at, zone, sheet.now) }) : null}
       </p>
-      {shut === null ? (
+      {secondShut === null ? (
         <SecondForm sheet={sheet} what={what} />
       ) : (
-        <section className="sheet-standing" role="status">
-          <h2 className="t-head">
-            {shut === 'same-person' ? words.samePerson : shut === 'no-first' ? words.noFirst : words.mayNot}
-          </h2>
-          <p>
-            {shut === 'same-person'
-              ? words.samePersonBody
-              : shut === 'no-first'
-                ? words.noFirstBody
-                : words.mayNotBody}
-          </p>
-        </section>
+        <Shut sheet={sheet} why={secondShut} />
       )}
       <div className="stack">
         <ButtonLink kind="plain" to={`${paths.orderSheet(number)}?dose=${key}&part=whole`}>
           {words.whole}
         </ButtonLink>
-        {shut === null ? <p className="t-note">{words.wholeNote}</p> : null}
+        {secondShut === null ? <p className="t-note">{words.wholeNote}</p> : null}
       </div>
     </>
   )
 }
 
+const shutWords = {
+  'may-not': () => [words.mayNot, words.mayNotBody],
+  'no-first': () => [words.noFirst, words.noFirstBody],
+  'same-person': () => [words.samePerson, words.samePersonBody],
+  'amount-seen': () => [words.amountSeen, words.amountSeenBody],
+  'begin-again': () => [words.beginAgain, words.beginAgainBody],
+}
+
+/** Why the second calculation cannot be made by this person now, and what has to happen. */
+function Shut({ sheet, why }: { sheet: BathSheet; why: NonNullable<BathSheet['secondShut']> }) {
+  const [heading, body] = shutWords[why]()
+  return (
+    <>
+      {why === 'begin-again' ? <Differing of={sheet.second} /> : null}
+      <section className="sheet-standing" role="status">
+        <h2 className="t-head">{heading}</h2>
+        <p>{body}</p>
+      </section>
+    </>
+  )
+}
+
+/** What did not agree, to whoever made the second calculation; nothing of the first is told. */
+function Differing({ of }: { of: BathSheet['second'] }) {
+  if (of === null || of.agrees) return null
+  return (
+    <div role="alert">
+      <CautionBlock level="stop" title={words.differs}>
+        {[...(of.mine ? of.differs.map(differsWords) : []), words.differsBody].join(' ')}
+      </CautionBlock>
+    </div>
+  )
+}
+
 function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
-  const { number, key, second } = sheet
+  const { number, key } = sheet
   const units = amountUnits(sheet)
   const [form, setForm] = useState(() => emptySecond(units[0] ?? 'g'))
   const [id, setId] = useState(newId)
@@ -78,7 +102,6 @@ function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
   const refusal = useRefusal()
   const say = useToast()
   const shut = secondIsOpen(form)
-  const fault = second !== null && second.mine && !second.agrees ? second : null
   const change = (next: Partial<typeof form>) => setForm({ ...form, ...next })
 
   const send = async () => {
@@ -102,16 +125,12 @@ function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
         void send()
       }}
     >
-      {fault ? (
-        <div role="alert">
-          <CautionBlock level="stop" title={words.differs}>
-            {[...fault.differs.map(differsWords), words.differsBody].join(' ')}
-          </CautionBlock>
-        </div>
-      ) : null}
       <p>{words.intro}</p>
       {what}
-      <WrongSummary fields={[]} general={refusal.general(['/amount', '/strengthRead', '/enclosureRead'])} />
+      <WrongSummary
+        fields={[]}
+        general={refusal.general(['/amount', '/strengthRead', '/enclosureRead', '/markRead'])}
+      />
       <TextField
         label={words.enclosure}
         value={form.enclosure}
@@ -122,9 +141,11 @@ function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
       />
       <TextField
         label={words.mark}
+        hint={words.markHint}
         value={form.mark}
         maxLength={120}
         autoComplete="off"
+        wrong={refusal.at('/markRead')}
         onChange={(event) => change({ mark: event.target.value })}
       />
       <QuantityField

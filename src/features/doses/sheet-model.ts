@@ -5,23 +5,20 @@ export type SheetPart = 'second' | 'whole' | null
 
 /**
  * Whether the sheet is shown without amounts: to whoever may be the second person, until the two agree or they say that
- * they are not the one.
+ * they are not the one. Whoever fetches the whole one is remembered, and can't be the second person any more; so before
+ * the first calculation nobody does.
  *
  * @param blind the blind sheet
- * @returns `blind` · `whole`: it has to be fetched with its amounts · `same`: nothing was left out, so this is the whole
+ * @returns `blind`: the second calculation · `whole`: it has to be fetched with its amounts · `same`: this one is shown
  */
 export function sheetMode(blind: BathSheet, part: SheetPart): 'blind' | 'whole' | 'same' {
   if (!blind.blind) return 'same'
   if (part === 'second') return 'blind'
-  const waits = blind.first !== null && !blind.first.mine && blind.secondNeeded && blind.state === 'due'
-  return waits && part !== 'whole' ? 'blind' : 'whole'
-}
-
-/** Why somebody cannot make the second calculation; null when they can. */
-export function secondIsShut(blind: BathSheet): 'no-first' | 'same-person' | 'may-not' | null {
-  if (blind.first === null) return 'no-first'
-  if (blind.first.mine) return 'same-person'
-  return blind.may.includes('dose.calculate-second') ? null : 'may-not'
+  if (part !== 'whole' && blind.secondNeeded && blind.state === 'due') {
+    if (blind.first === null) return 'same'
+    if (blind.secondShut === null || blind.secondShut === 'begin-again') return 'blind'
+  }
+  return 'whole'
 }
 
 /** What the sheet asks for next. */
@@ -112,4 +109,9 @@ export function restInTheWay(sheet: BathSheet): string[] {
 /** Whether somebody else may act on this dose at any moment: a second person who calculates, whoever stops the bath. */
 export function othersMayAct(sheet: BathSheet): boolean {
   return sheet.state === 'running' || (sheet.state === 'due' && sheet.first !== null)
+}
+
+/** Whether somebody who would calculate second waits for the first: the blind sheet looks again by itself. */
+export function waitsForOthers({ blind, state, secondShut }: BathSheet): boolean {
+  return blind && state === 'due' && (secondShut === 'no-first' || secondShut === 'begin-again')
 }

@@ -97,7 +97,12 @@ export function Amounts({ sheet }: { sheet: BathSheet }) {
   return (
     <section className="stack">
       <h2 className="t-head">{words.amount}</h2>
-      {amountNowText === null ? (
+      {sheet.blind ? (
+        <>
+          <p>{words.amountLater}</p>
+          {driftPercent === null ? null : <p className="t-2">{reason}</p>}
+        </>
+      ) : amountNowText === null ? (
         <p className="t-strong">{words.amountNone}</p>
       ) : (
         <div className="sheet-amounts">

@@ -15,8 +15,8 @@ import {
   othersMayAct,
   otherCautions,
   restInTheWay,
-  secondIsShut,
   sheetMode,
+  waitsForOthers,
 } from '../../../src/features/doses/sheet-model.ts'
 
 const now = '2026-12-01T18:20:00.000Z'
@@ -30,6 +30,7 @@ const second = {
   mine: true,
   agrees: true,
   differs: [],
+  markCompared: true,
   differencePercent: 0.5,
 }
 const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
@@ -82,6 +83,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   secondNeeded: true,
   first: null,
   second: null,
+  secondShut: null,
   mayStart: false,
   why: ['x'],
   recorded: [],
@@ -95,20 +97,26 @@ describe('whether somebody is shown amounts', () => {
     expect(sheetMode(blind({ first }), null)).toBe('blind')
     expect(sheetMode(blind({ first }), 'whole')).toBe('whole')
     expect(sheetMode(blind({ first }), 'second')).toBe('blind')
+    expect(sheetMode(blind({ first, secondShut: 'begin-again' }), null)).toBe('blind')
   })
-  it('shows them to the first person, before the first calculation, and where no second is needed', () => {
-    expect(sheetMode(blind({ first: { ...first, mine: true } }), null)).toBe('whole')
-    expect(sheetMode(blind({}), null)).toBe('whole')
+  it('shows them to the first person, to whoever knows them already, and where no second is needed', () => {
+    const mine = { ...first, mine: true }
+    expect(sheetMode(blind({ first: mine, secondShut: 'same-person' }), null)).toBe('whole')
+    expect(sheetMode(blind({ first, secondShut: 'amount-seen' }), null)).toBe('whole')
     expect(sheetMode(blind({ first, secondNeeded: false }), null)).toBe('whole')
+  })
+  it('fetches them for nobody before the first calculation: whoever looks is no second person any more', () => {
+    expect(sheetMode(blind({ secondShut: 'no-first' }), null)).toBe('same')
+    expect(sheetMode(blind({ secondShut: 'no-first' }), 'whole')).toBe('whole')
   })
   it('needs no second reading where the server left nothing out', () => {
     expect(sheetMode(sheet({ first, second }), null)).toBe('same')
   })
-  it('tells the first person that they cannot be the second', () => {
-    expect(secondIsShut(blind({ first: { ...first, mine: true } }))).toBe('same-person')
-    expect(secondIsShut(blind({}))).toBe('no-first')
-    expect(secondIsShut(blind({ first, may: [] }))).toBe('may-not')
-    expect(secondIsShut(blind({ first }))).toBeNull()
+  it('looks again by itself while somebody waits for the first calculation', () => {
+    expect(waitsForOthers(blind({ secondShut: 'no-first' }))).toBe(true)
+    expect(waitsForOthers(blind({ first, secondShut: 'begin-again' }))).toBe(true)
+    expect(waitsForOthers(blind({ first }))).toBe(false)
+    expect(waitsForOthers(sheet({ secondShut: 'no-first' }))).toBe(false)
   })
 })
 

@@ -1,0 +1,97 @@
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { aFormalinHouse } from '../builders/a-bath.ts'
+import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
+import { startApi, testDay } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
+
+let api: TestApi
+let house: FormalinHouse
+let bath: BathTank
+beforeAll(async () => {
+  api = await startApi()
+  house = await aFormalinHouse(api)
+  bath = await house.tankWithSchool()
+})
+beforeEach(() => api.clock.set(testDay))
+afterAll(() => api.stop())
+
+const aBathToCalculate = async () => {
+  const number = await house.signedBath(bath)
+  await house.freshWater(bath)
+  await house.calculateFirst(number).expect(201)
+  return number
+}
+const blindSheet = async (number: string, by: TestPerson) =>
+  (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
+
+describe('a second calculation is blind', () => {
+  it('so nobody makes it who was shown the amount, on the sheet or on paper', async () => {
+    const keeper = await api.as('keeper')
+    const veterinarian = await api.as('veterinarian')
+    const number = await aBathToCalculate()
+    expect((await blindSheet(number, keeper)).secondShut).toBeNull()
+
+    // the whole sheet, and then back as if nothing had been seen
+    const whole = await keeper.agent.get(house.doseAt(number)).expect(200)
+    expect(whole.body.amountNow).toEqual({ value: '218', unit: 'mL' })
+    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+    const seen = await house.calculateSecond(bath, number, {}, keeper)
+    expect([seen.status, seen.body.code]).toEqual([403, 'another-person-needed'])
+    expect(seen.body.detail).toContain('You have been shown the amount')
+
+    await veterinarian.agent.get(house.doseAt(number, '/print')).expect(200)
+    expect((await house.calculateSecond(bath, number, {}, veterinarian)).status).toBe(403)
+
+    // each is noted once, with who and when
+    await keeper.agent.get(house.doseAt(number)).expect(200)
+    const noted = await api.composition.parts.dataSource.query(
+      `SELECT a.actor_id FROM audit_entries a WHERE a.action = 'dose.see-amount' AND a.subject_label = $1
+        ORDER BY a.seq`,
+      [number],
+    )
+    expect(noted.map((row: { actor_id: string }) => row.actor_id)).toEqual(
+      expect.arrayContaining([keeper.id, veterinarian.id]),
+    )
+    expect(noted.filter((row: { actor_id: string }) => row.actor_id === keeper.id)).toHaveLength(1)
+
+    // whoever saw nothing still may; once the two agree the amount is there for everybody
+    await house.calculateSecond(bath, number).expect(201)
+    expect((await blindSheet(number, await api.as('keeper'))).amountNow).toEqual({ value: '218', unit: 'mL' })
+  })
+
+  it('by whoever never made a first one, also when another worked it out again since', async () => {
+    const number = await aBathToCalculate()
+    api.clock.set(new Date(testDay.getTime() + 60_000))
+    await house.calculateFirst(number, await api.as('veterinarian')).expect(201)
+    const own = await house.calculateSecond(bath, number, {}, house.technician)
+    expect(own.body.code).toBe('another-person-needed')
+  })
+
+  it('and after a disagreement both begin again; the same request again gives the first answer', async () => {
+    const number = await aBathToCalculate()
+    const wrong = { id: api.nextId(), amount: { value: '2180', unit: 'mL' } }
+    const answer = await house.calculateSecond(bath, number, wrong).expect(201)
+    expect(answer.body).toMatchObject({ secondShut: 'begin-again', second: { agrees: false } })
+    expect((await house.calculateSecond(bath, number, wrong).expect(201)).body.second).toEqual(
+      answer.body.second,
+    )
+    const right = await house.calculateSecond(bath, number)
+    expect([right.status, right.body.code]).toEqual([409, 'calculations-begin-again'])
+    expect(right.body.detail).toContain('The first is worked out anew')
+    api.clock.set(new Date(testDay.getTime() + 60_000))
+    await house.calculateFirst(number).expect(201)
+    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    await house.calculateSecond(bath, number).expect(201)
+    await house.give(number).expect(201)
+  })
+
+  it('and compares the mark that was read with the depth that the volume rests on', async () => {
+    const number = await aBathToCalculate()
+    const unit = await house.calculateSecond(bath, number, { markRead: '0.68' })
+    expect([unit.status, unit.body.errors[0].pointer]).toEqual([422, '/markRead'])
+    expect(unit.body.errors[0].detail).toBe('Type the depth as a number with its unit, for example 0.68 m.')
+    const low = await house.calculateSecond(bath, number, { markRead: '48 cm' }).expect(201)
+    expect(low.body.second).toMatchObject({ agrees: false, differs: ['mark'], markCompared: true })
+    expect((await house.give(number)).body.code).toBe('dose-not-possible')
+  })
+})
