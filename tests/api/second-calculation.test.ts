@@ -25,39 +25,46 @@ const blindSheet = async (number: string, by: TestPerson) =>
   (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
 
 describe('a second calculation is blind', () => {
-  it('so nobody makes it who was shown the amount, on the sheet or on paper', async () => {
-    const keeper = await api.as('keeper')
-    const veterinarian = await api.as('veterinarian')
-    const number = await aBathToCalculate()
-    expect((await blindSheet(number, keeper)).secondShut).toBeNull()
+  it(
+    'so nobody makes it who was shown the amount, on the sheet or on paper',
+    { timeout: 120_000 },
+    async () => {
+      const keeper = await api.as('keeper')
+      const veterinarian = await api.as('veterinarian')
+      const number = await aBathToCalculate()
+      expect((await blindSheet(number, keeper)).secondShut).toBeNull()
 
-    // the whole sheet, and then back as if nothing had been seen
-    const whole = await keeper.agent.get(house.doseAt(number)).expect(200)
-    expect(whole.body.amountNow).toEqual({ value: '218', unit: 'mL' })
-    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
-    const seen = await house.calculateSecond(bath, number, {}, keeper)
-    expect([seen.status, seen.body.code]).toEqual([403, 'another-person-needed'])
-    expect(seen.body.detail).toContain('You have been shown the amount')
+      // the whole sheet, and then back as if nothing had been seen
+      const whole = await keeper.agent.get(house.doseAt(number)).expect(200)
+      expect(whole.body.amountNow).toEqual({ value: '218', unit: 'mL' })
+      expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+      const seen = await house.calculateSecond(bath, number, {}, keeper)
+      expect([seen.status, seen.body.code]).toEqual([403, 'another-person-needed'])
+      expect(seen.body.detail).toContain('You have been shown the amount')
 
-    await veterinarian.agent.get(house.doseAt(number, '/print')).expect(200)
-    expect((await house.calculateSecond(bath, number, {}, veterinarian)).status).toBe(403)
+      await veterinarian.agent.get(house.doseAt(number, '/print')).expect(200)
+      expect((await house.calculateSecond(bath, number, {}, veterinarian)).status).toBe(403)
 
-    // each is noted once, with who and when
-    await keeper.agent.get(house.doseAt(number)).expect(200)
-    const noted = await api.composition.parts.dataSource.query(
-      `SELECT a.actor_id FROM audit_entries a WHERE a.action = 'dose.see-amount' AND a.subject_label = $1
+      // each is noted once, with who and when
+      await keeper.agent.get(house.doseAt(number)).expect(200)
+      const noted = await api.composition.parts.dataSource.query(
+        `SELECT a.actor_id FROM audit_entries a WHERE a.action = 'dose.see-amount' AND a.subject_label = $1
         ORDER BY a.seq`,
-      [number],
-    )
-    expect(noted.map((row: { actor_id: string }) => row.actor_id)).toEqual(
-      expect.arrayContaining([keeper.id, veterinarian.id]),
-    )
-    expect(noted.filter((row: { actor_id: string }) => row.actor_id === keeper.id)).toHaveLength(1)
+        [number],
+      )
+      expect(noted.map((row: { actor_id: string }) => row.actor_id)).toEqual(
+        expect.arrayContaining([keeper.id, veterinarian.id]),
+      )
+      expect(noted.filter((row: { actor_id: string }) => row.actor_id === keeper.id)).toHaveLength(1)
 
-    // whoever saw nothing still may; once the two agree the amount is there for everybody
-    await house.calculateSecond(bath, number).expect(201)
-    expect((await blindSheet(number, await api.as('keeper'))).amountNow).toEqual({ value: '218', unit: 'mL' })
-  })
+      // whoever saw nothing still may; once the two agree the amount is there for everybody
+      await house.calculateSecond(bath, number).expect(201)
+      expect((await blindSheet(number, await api.as('keeper'))).amountNow).toEqual({
+        value: '218',
+        unit: 'mL',
+      })
+    },
+  )
 
   it('by whoever never made a first one, also when another worked it out again since', async () => {
     const number = await aBathToCalculate()
