@@ -338,9 +338,7 @@ export const signOrder = contract({
 })
 
 export const holdOrder = contract({
-  id: 'holdOrder',
-  method: 'post',
-  path: '/orders/:number/holds',
+  ...actAddresses.holdOrder,
   action: 'order.hold',
   summary: 'Hold an order at once; needs no password and no reason',
   params: orderParams,
@@ -351,7 +349,6 @@ export const holdOrder = contract({
   }),
   reply: { 201: Order },
   problems: ['not-found', 'id-already-used'],
-  idempotent: 'by-record-id',
 })
 
 export const liftOrderHold = contract({

@@ -31,5 +31,6 @@ export const actAddresses = {
     path: '/handover-notes/:id/reads',
     idempotent: 'by-record-id',
   },
+  holdOrder: { id: 'holdOrder', method: 'post', path: '/orders/:number/holds', idempotent: 'by-record-id' },
   stopBath: { id: 'stopBath', method: 'post', path: '/doses/:doseId/stop', idempotent: 'by-record-id' },
 } as const

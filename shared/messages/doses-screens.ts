@@ -94,6 +94,20 @@ export const sheetWords = defineMessages({
   holdAct: 'Hold it now',
   holdBack: 'Do not hold',
   heldNow: 'The order is held.',
+  unsentHold: (p: { at: string }) => `Held at ${p.at}: not sent yet`,
+  unsentHoldBody:
+    'Nobody else can see it yet. It is kept on this device and is sent by itself when there is a signal. Give nothing, and tell the others by word of mouth.',
+  unsentStop: (p: { at: string }) => `Ended at ${p.at}: not sent yet`,
+  unsentStopBody:
+    'It is kept on this device with its own time, and is sent by itself when there is a signal. Elsewhere the bath still looks as if it ran.',
+  notTaken: 'The server did not take it:',
+  toUnsent: 'Entries on this device',
+  keptStop: 'The stop is kept on this device.',
+  keptEnd: 'The end is kept on this device.',
+  keptHold: 'The hold is kept on this device.',
+  keptSheet: (p: { at: string }) =>
+    `No signal. This is the bath as it was at ${p.at}; its time goes on by the clock of this device.`,
+  holdBlind: 'You can hold the order all the same: it is kept here and sent when there is a signal.',
   isHeld: 'Held: do not dose',
   isDiscontinued: 'Discontinued: do not dose',
   isExpired: 'Past its last window: do not dose',

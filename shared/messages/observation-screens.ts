@@ -105,6 +105,8 @@ export const observationWords = defineMessages({
   kindObservation: 'Observation',
   kindHold: 'Hold',
   kindTelephoned: 'Telephoned',
+  kindBathStop: 'Bath stopped or ended',
+  kindOrderHold: 'Order held',
   madeAt: (p: { at: string }) => `made ${p.at}`,
   triedTimes: (p: { count: number }) => `tried ${counted(p.count, 'time', 'times')}`,
   mend: 'Mend',

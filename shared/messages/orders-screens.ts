@@ -45,6 +45,8 @@ export const orderListWords = defineMessages({
 
 /** Words of one order, signed or not. */
 export const orderViewWords = defineMessages({
+  heldHere: 'Held, not sent yet: kept on this device, and sent by itself when there is a signal.',
+  toUnsent: 'Entries on this device',
   kind: 'Treatment order: bath',
   source: (p: { by: string; at: string }) => `Written by ${p.by}, ${p.at}.`,
   particulars: 'The order',

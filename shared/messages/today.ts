@@ -48,6 +48,8 @@ export const todayWords = defineMessages({
   stop: 'Stop the bath',
   stopped: (p: { enclosure: string }) => `Bath at ${p.enclosure} stopped. Write what was seen on its sheet.`,
   stopQuestion: (p: { enclosure: string }) => `Stop the bath at ${p.enclosure} now?`,
+  stopKept: 'Stopped, not sent yet: kept on this device.',
+  toUnsent: 'Entries on this device',
   stopBody: 'It is recorded as ended at this minute. No password, no reason.',
   stopSeen: 'What was seen (may stay empty)',
   keepOn: 'Leave it running',

@@ -17,6 +17,7 @@ import { SecondCalculation } from './second-calculation.tsx'
 import { doseToOpen, othersMayAct, sheetMode, waitsForOthers } from './sheet-model.ts'
 import type { SheetPart } from './sheet-model.ts'
 import { StopCriteria } from './sheet-parts.tsx'
+import { UnsentActs } from './unsent-acts.tsx'
 import { WholeSheet } from './whole-sheet.tsx'
 
 /** While a second person calculates or a bath runs, somebody else may act at any moment. */
@@ -78,6 +79,7 @@ function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
           ) : undefined
         }
       >
+        <UnsentActs number={sheet.number} doseId={null} zone={zone} now={sheet.now} />
         <SecondCalculation sheet={sheet} zone={zone} />
         <StopCriteria sheet={sheet} />
       </PhoneSheet>

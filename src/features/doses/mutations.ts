@@ -2,7 +2,6 @@ import { useMutation, useQueryClient } from '@tanstack/react-query'
 import type { BodyOf, Contract } from '../../../shared/contracts/contract.ts'
 import * as doses from '../../../shared/contracts/doses.contract.ts'
 import { noteLotEvent } from '../../../shared/contracts/formulary.contract.ts'
-import { holdOrder } from '../../../shared/contracts/orders.contract.ts'
 import { api } from '../../lib/api-client.ts'
 import type { CallOptions } from '../../lib/api-client.ts'
 import { ordersKey } from '../orders/index.ts'
@@ -44,9 +43,6 @@ export const useStopBath = () =>
     params: { doseId },
     body,
   }))
-
-export const useHold = (number: string) =>
-  useTankAct(holdOrder, (body: BodyOf<typeof holdOrder>) => ({ params: { number }, body }))
 
 export const useNoteLot = () =>
   useTankAct(noteLotEvent, ({ lotId, ...body }: BodyOf<typeof noteLotEvent> & { lotId: string }) => ({

@@ -1,16 +1,18 @@
 import { useState } from 'react'
-import { timerWords as words } from '../../../shared/messages/doses-screens.ts'
+import { useQueryClient } from '@tanstack/react-query'
+import { sheetWords, timerWords as words } from '../../../shared/messages/doses-screens.ts'
+import { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
+import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
+import { stopEntries } from '../../lib/stop-entries.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
-import { useRefusal } from '../../lib/use-refusal.ts'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { MomentField } from '../../ui/moment-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
-import { useStopBath } from './mutations.ts'
 
 /** `stop` before its time, `end` at its time, `out`: an agent that was left in the water is out of it. */
 export type StopKind = 'stop' | 'end' | 'out'
@@ -22,22 +24,30 @@ const wordsOf = (kind: StopKind) =>
     out: { question: words.outQuestion, body: words.outBody, act: words.outAct, done: words.doneOut },
   })[kind]
 
-/** Ends a bath. Its time is the moment of the first press; no password and no word is asked for. */
+/**
+ * Ends a bath, with a signal or without: it is kept on the device first. Its time is the moment of the first press; no
+ * password and no word is asked for.
+ */
 export function StopDialog({
   doseId,
+  label,
   kind,
   now,
   onBack,
 }: {
   doseId: string
+  /** The enclosure, for the list of what is not sent yet. */
+  label: string
   kind: StopKind
   /** The server's time at the press. */
   now: string
   onBack: () => void
 }) {
   const when = useMoment(now)
-  const stop = useStopBath()
-  const refusal = useRefusal()
+  const me = useMe()
+  const client = useQueryClient()
+  const [busy, setBusy] = useState(false)
+  const [refused, setRefused] = useState<string>()
   const say = useToast()
   const [id] = useState(newId)
   const [seen, setSeen] = useState('')
@@ -48,18 +58,22 @@ export function StopDialog({
     if (when.instant === null) return
     const happenedAt = when.instant
     const typed = { seen: typedText(seen), rescue: typedText(rescue) }
-    const done = await refusal.attempt(() =>
-      stop.mutateAsync({
-        doseId,
+    setBusy(true)
+    const fate = await enterAndSend(
+      client,
+      stopEntries.stopBath(me.id, label, doseId, {
         id,
         cause: kind === 'stop' ? 'stopped' : 'time-up',
         happenedAt,
         ...(typed.seen === undefined ? {} : { seen: typed.seen }),
         ...(typed.rescue === undefined ? {} : { rescue: typed.rescue }),
       }),
+      [[]],
     )
-    if (!done) return
-    say({ words: kind === 'stop' ? words.stopped : words.ended })
+    setBusy(false)
+    if (fate === 'refused') return setRefused(refusalOf(id))
+    const kept = kind === 'stop' ? sheetWords.keptStop : sheetWords.keptEnd
+    say({ words: fate === 'kept' ? kept : kind === 'stop' ? words.stopped : words.ended })
     onBack()
   }
 
@@ -74,7 +88,7 @@ export function StopDialog({
           <Button
             kind={kind === 'stop' ? 'stop' : 'primary'}
             size="touch"
-            disabled={refusal.busy}
+            disabled={busy}
             shut={when.missing ?? false}
             onClick={() => void send()}
           >
@@ -88,7 +102,7 @@ export function StopDialog({
     >
       <div className="stack">
         <p>{its.body}</p>
-        <WrongSummary fields={[]} general={refusal.general(['/happenedAt'])} />
+        <WrongSummary fields={[]} general={refused} />
         {kind === 'out' ? null : (
           <TextareaField
             label={words.seen}
@@ -107,12 +121,7 @@ export function StopDialog({
           value={rescue}
           onChange={(event) => setRescue(event.target.value)}
         />
-        <MomentField
-          label={words.when}
-          value={when.moment}
-          onChange={when.setMoment}
-          wrong={when.missing ?? refusal.at('/happenedAt')}
-        />
+        <MomentField label={words.when} value={when.moment} onChange={when.setMoment} wrong={when.missing} />
       </div>
     </Dialog>
   )

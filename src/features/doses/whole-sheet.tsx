@@ -4,6 +4,7 @@ import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words, timerWords } from '../../../shared/messages/doses-screens.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
+import { useUnsent } from '../../lib/stop-entries.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
@@ -24,6 +25,7 @@ import type { NextAct } from './sheet-model.ts'
 import { Amounts, CautionsNow, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'
 import { serverOffsetMs } from './timer-model.ts'
+import { UnsentActs } from './unsent-acts.tsx'
 import { StopDialog } from './stop-dialog.tsx'
 import type { StopKind } from './stop-dialog.tsx'
 
@@ -85,6 +87,7 @@ export function WholeSheet({
           )
         }
       >
+        <UnsentActs number={sheet.number} doseId={record?.id ?? null} zone={zone} now={sheet.now} />
         <Standing sheet={sheet} zone={zone} />
         {act === 'in-the-water' ? (
           <section className="sheet-standing">
@@ -125,7 +128,13 @@ export function WholeSheet({
         <RecordDialog sheet={sheet} now={front.now} onBack={() => setFront(null)} />
       ) : null}
       {front && front.what !== 'hold' && front.what !== 'record' && record ? (
-        <StopDialog doseId={record.id} kind={front.what} now={front.now} onBack={() => setFront(null)} />
+        <StopDialog
+          doseId={record.id}
+          label={sheet.enclosureCode}
+          kind={front.what}
+          now={front.now}
+          onBack={() => setFront(null)}
+        />
       ) : null}
     </>
   )
@@ -168,6 +177,7 @@ function Foot({
   onLookAgain: () => void
 }) {
   const may = (action: string) => sheet.may.includes(action)
+  const unsentStop = useUnsent({ doseId })
   const primary = (
     <Primary sheet={sheet} act={act} lotId={lotId} onFront={onFront} onLookAgain={onLookAgain} />
   )
@@ -190,7 +200,7 @@ function Foot({
           </ButtonLink>
           {hold}
         </div>
-        {may('bath.stop') && doseId !== null ? (
+        {may('bath.stop') && doseId !== null && unsentStop === null ? (
           <div className="foot-duo">
             <Button kind="stop" size="touch" onClick={() => onFront('stop')}>
               {timerWords.stop}

@@ -1,4 +1,4 @@
-export { enterAndSend, refusalOf } from './enter.ts'
+export { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
 export { entries } from './entries.ts'
 export { ObservationSheet } from './observation-sheet.tsx'
 export { Rounds } from './rounds.tsx'

@@ -104,6 +104,7 @@ function EntryList({
                 {sayObservation(item.body as unknown as ObservationBody).join('. ')}
               </span>
             ) : null}
+            {writtenWith(item) === '' ? null : <span className="block">{writtenWith(item)}</span>}
             {item.refusal && item.state === 'refused' ? (
               <span className="t-strong block">{item.refusal.says}</span>
             ) : null}
@@ -139,7 +140,17 @@ function EntryList({
   )
 }
 
-function kindOf({ kind }: OutboxItem): string {
-  if (kind === 'hold') return words.kindHold
-  return kind === 'telephoned' ? words.kindTelephoned : words.kindObservation
+const kindWords: Readonly<Record<string, () => string>> = {
+  hold: () => words.kindHold,
+  telephoned: () => words.kindTelephoned,
+  'bath-stop': () => words.kindBathStop,
+  'order-hold': () => words.kindOrderHold,
+}
+
+const kindOf = ({ kind }: OutboxItem): string => kindWords[kind]?.() ?? words.kindObservation
+
+/** What a person wrote with a stop or a hold. */
+function writtenWith({ kind, body }: OutboxItem): string {
+  if (kind !== 'bath-stop' && kind !== 'order-hold') return ''
+  return [body['seen'], body['rescue'], body['reason']].filter((text) => typeof text === 'string').join('. ')
 }

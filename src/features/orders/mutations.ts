@@ -3,7 +3,6 @@ import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import {
   discontinueOrder,
   draftOrder,
-  holdOrder,
   liftOrderHold,
   reviseDraft,
   signOrder,
@@ -46,14 +45,6 @@ export function useSignOrder() {
   return useMutation({
     mutationFn: ({ number, key, ...body }: { number: string; key: string } & BodyOf<typeof signOrder>) =>
       api(signOrder, { params: { number }, body, key, patienceMs: 30_000 }),
-    onSuccess,
-  })
-}
-
-export function useHoldOrder(number: string) {
-  const onSuccess = useKeepOrder()
-  return useMutation({
-    mutationFn: (body: BodyOf<typeof holdOrder>) => api(holdOrder, { params: { number }, body }),
     onSuccess,
   })
 }

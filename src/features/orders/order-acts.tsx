@@ -1,10 +1,16 @@
 import { useState } from 'react'
+import { useQueryClient } from '@tanstack/react-query'
+import { Link } from 'react-router-dom'
 import { PenLine, Play, Printer } from 'lucide-react'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { useMay } from '../../lib/may.ts'
+import { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
+import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
+import { stopEntries, useUnsent } from '../../lib/stop-entries.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { Button, buttonClass, ButtonFace } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
@@ -12,7 +18,7 @@ import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
-import { useDiscontinue, useHoldOrder, useLiftHold } from './mutations.ts'
+import { useDiscontinue, useLiftHold } from './mutations.ts'
 import { printAddress } from './queries.ts'
 
 const over = new Set<Order['phase']>(['completed', 'expired', 'discontinued'])
@@ -55,28 +61,34 @@ export function OrderActs({ order, version }: { order: Order; version: number })
   )
 }
 
+/** One touch, with a signal or without: it is kept on the device first. */
 function Hold({ order }: { order: Order }) {
+  const me = useMe()
+  const client = useQueryClient()
   const [reason, setReason] = useState('')
-  const [id, setId] = useState(newId)
-  const hold = useHoldOrder(order.number)
-  const refusal = useRefusal()
+  const [busy, setBusy] = useState(false)
+  const [refused, setRefused] = useState<string>()
+  const unsent = useUnsent({ number: order.number })
   const say = useToast()
   const send = async () => {
-    const done = await refusal.attempt(() =>
-      hold.mutateAsync({
-        id,
-        happenedAt: new Date().toISOString(),
-        ...(reason.trim() ? { reason: reason.trim() } : {}),
-      }),
-    )
-    if (!done) return
-    setId(newId())
+    const id = newId()
+    const typed = typedText(reason)
+    const body = {
+      id,
+      happenedAt: new Date().toISOString(),
+      ...(typed === undefined ? {} : { reason: typed }),
+    }
+    setBusy(true)
+    const fate = await enterAndSend(client, stopEntries.holdOrder(me.id, order.number, body), [[]])
+    setBusy(false)
+    setRefused(fate === 'refused' ? refusalOf(id) : undefined)
+    if (fate === 'refused') return
     setReason('')
-    say({ words: words.held })
+    say({ words: fate === 'kept' ? words.heldHere : words.held })
   }
   return (
     <div className="stack">
-      <Button kind="hold" size="touch" block disabled={refusal.busy} onClick={() => void send()}>
+      <Button kind="hold" size="touch" block disabled={busy} onClick={() => void send()}>
         {words.hold}
       </Button>
       <TextField
@@ -85,10 +97,14 @@ function Hold({ order }: { order: Order }) {
         hint={words.holdNeedsNone}
         value={reason}
         maxLength={2000}
-        wrong={refusal.at('/reason')}
         onChange={(event) => setReason(event.target.value)}
       />
-      <WrongSummary fields={[]} general={refusal.general(['/reason'])} />
+      <WrongSummary fields={[]} general={refused} />
+      {unsent === null ? null : (
+        <p role="status" className="t-strong">
+          {words.heldHere} <Link to={paths.unsent()}>{words.toUnsent}</Link>
+        </p>
+      )}
     </div>
   )
 }

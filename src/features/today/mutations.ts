@@ -1,5 +1,4 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import type { stopBath } from '../../../shared/contracts/doses.contract.ts'
 import type { noteHandoverRead, writeHandover } from '../../../shared/contracts/handover.contract.ts'
 import type { noteSeen } from '../../../shared/contracts/notices.contract.ts'
 import type { reviewObservation } from '../../../shared/contracts/observations.contract.ts'
@@ -45,23 +44,6 @@ export function useLiftOrder() {
         params: { number: given.number },
         body: { reason: given.reason },
         key: given.key,
-      }),
-    onSuccess,
-  })
-}
-
-export function useStopBath() {
-  const onSuccess = useRefresh()
-  return useMutation({
-    mutationFn: (given: { doseId: string; id: string; happenedAt: string; seen: string }) =>
-      api<typeof stopBath>(actAddresses.stopBath, {
-        params: { doseId: given.doseId },
-        body: {
-          id: given.id,
-          cause: 'stopped',
-          happenedAt: given.happenedAt,
-          ...(given.seen === '' ? {} : { seen: given.seen }),
-        },
       }),
     onSuccess,
   })

@@ -1,47 +1,56 @@
 import { useRef, useState } from 'react'
+import { useQueryClient } from '@tanstack/react-query'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { todayWords } from '../../../shared/messages/today.ts'
+import { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
+import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
-import { useRefusal } from '../../lib/use-refusal.ts'
+import { stopEntries } from '../../lib/stop-entries.ts'
+import { typedText } from '../../lib/typed-text.ts'
 import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
-import { useStopBath } from './mutations.ts'
 
 /**
  * Ends a bath from the worklist: no password, no reason. It asks once, because here a finger may land on the wrong
  * line; the sheet at the tank stops without asking.
  */
 export function StopBathDialog({ item, onBack }: { item: TodayWork; onBack: () => void }) {
-  const stop = useStopBath()
+  const me = useMe()
+  const client = useQueryClient()
   const toast = useToast()
-  const refusal = useRefusal()
   const id = useRef(newId())
+  const [busy, setBusy] = useState(false)
+  const [refused, setRefused] = useState<string>()
   const [seen, setSeen] = useState('')
   const enclosure = String(item.params['enclosure'])
   const send = async () => {
-    const sent = await refusal.attempt(() =>
-      stop.mutateAsync({
-        doseId: String(item.params['doseId']),
+    const typed = typedText(seen)
+    setBusy(true)
+    const fate = await enterAndSend(
+      client,
+      stopEntries.stopBath(me.id, enclosure, String(item.params['doseId']), {
         id: id.current,
+        cause: 'stopped',
         happenedAt: new Date().toISOString(),
-        seen: seen.trim(),
+        ...(typed === undefined ? {} : { seen: typed }),
       }),
+      [[]],
     )
-    if (!sent) return
-    toast({ words: todayWords.stopped({ enclosure }) })
+    setBusy(false)
+    if (fate === 'refused') return setRefused(refusalOf(id.current))
+    toast({ words: fate === 'kept' ? todayWords.stopKept : todayWords.stopped({ enclosure }) })
     onBack()
   }
-  const wrong = refusal.general([])
   return (
     <Dialog
       question={todayWords.stopQuestion({ enclosure })}
       onBack={onBack}
       acts={
         <>
-          <Button kind="stop" shut={refusal.busy && formWords.sending} onClick={() => void send()}>
+          <Button kind="stop" shut={busy && formWords.sending} onClick={() => void send()}>
             {todayWords.stop}
           </Button>
           <Button onClick={onBack}>{todayWords.keepOn}</Button>
@@ -49,7 +58,7 @@ export function StopBathDialog({ item, onBack }: { item: TodayWork; onBack: () =
       }
     >
       <p>{todayWords.stopBody}</p>
-      {wrong === undefined ? null : <p role="alert">{wrong}</p>}
+      {refused === undefined ? null : <p role="alert">{refused}</p>}
       <TextareaField
         label={todayWords.stopSeen}
         value={seen}

@@ -1,8 +1,11 @@
 import { useRef, useState } from 'react'
+import { Link } from 'react-router-dom'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { goWords, todayWords } from '../../../shared/messages/today.ts'
 import { newId } from '../../lib/new-id.ts'
+import { paths } from '../../lib/paths.ts'
+import { useUnsent } from '../../lib/stop-entries.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
@@ -39,6 +42,13 @@ export function TodayActs({ item, title }: { item: TodayWork; title: string }) {
 
 function StopBath({ item }: { item: TodayWork }) {
   const [open, setOpen] = useState(false)
+  const unsent = useUnsent({ doseId: String(item.params['doseId']) })
+  if (unsent !== null)
+    return (
+      <p role="status" className="t-strong">
+        {todayWords.stopKept} <Link to={paths.unsent()}>{todayWords.toUnsent}</Link>
+      </p>
+    )
   return (
     <>
       <Button kind="stop" size="small" onClick={() => setOpen(true)}>
