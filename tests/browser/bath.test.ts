@@ -54,7 +54,12 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [/401 \(Unauthorized\)/, /409 \(Conflict\)/, /422 \(Unprocessable/]
+const expectedErrors = [
+  /401 \(Unauthorized\)/,
+  /409 \(Conflict\)/,
+  /422 \(Unprocessable/,
+  /ERR_INTERNET_DISCONNECTED/,
+]
 const desk = { width: 1440, height: 900, expectedErrors }
 const phone = { width: 390, height: 844, expectedErrors }
 
@@ -126,6 +131,10 @@ function listen(page: Page): string[] {
   })
   return heard
 }
+
+/** The sheet of the first dose as the server has it. */
+const asTheServerHasIt = async (number: string) =>
+  (await (await app.as('veterinarian')).agent.get(`/api/orders/${number}/doses/1`).expect(200)).body
 
 async function fillSecond(page: Page, amount: string) {
   await page.getByRole('textbox', { name: /Enclosure, from its label/ }).fill('QT-3')
@@ -237,6 +246,19 @@ describe('a bath at the tank', { timeout: patience }, () => {
       .waitFor()
     await keeper.getByText('Take the animals out, or flush the water now.').first().waitFor()
     await expectSound(keeper, 'bath-time-up-390')
+    // without a signal, and after a reload: the time goes on, and the stop is kept with its own time
+    await keeper.evaluate(async () => {
+      await navigator.serviceWorker.ready
+    })
+    await keeper.reload()
+    await keeper.getByRole('timer').waitFor()
+    await keeper.context().setOffline(true)
+    await keeper.reload()
+    await keeper.getByText(/^No signal\. This is the bath as it was at 15:0\d/).waitFor()
+    await keeper
+      .getByRole('timer')
+      .filter({ hasText: /over by 1:|over by 2:|over by 3:/ })
+      .waitFor()
     const stop = keeper.getByRole('button', { name: 'Stop the bath' })
     expect(await stop.evaluate((node) => node.getBoundingClientRect().bottom <= window.innerHeight)).toBe(
       true,
@@ -248,7 +270,17 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await expectSound(keeper, 'bath-stop-390')
     expect(await keeper.getByLabel('Password').count()).toBe(0)
     await dialog.getByRole('button', { name: 'Stop it now' }).click()
-    await keeper.getByText(/Stopped at 15:0\d, Test keeper/).waitFor()
+    await keeper.getByText(/^Ended at 15:0\d: not sent yet/).waitFor()
+    expect(await stop.count()).toBe(0)
+    await expectSound(keeper, 'bath-stop-unsent-390')
+    expect(await asTheServerHasIt(number)).toMatchObject({ state: 'running' })
+    await keeper.getByRole('button', { name: 'Hold' }).click()
+    await keeper.getByRole('dialog').getByRole('button', { name: 'Hold it now' }).click()
+    await keeper.getByText(/^Held at 15:0\d: not sent yet/).waitFor()
+    await keeper.context().setOffline(false)
+    await keeper.getByText(/Stopped at 15:0\d, Test keeper/).waitFor({ timeout: 30_000 })
+    await keeper.getByText('Held: do not dose').waitFor()
+    expect(await keeper.getByText(/not sent yet/).count()).toBe(0)
     await keeper.getByText('Seen: two on their side').waitFor()
     await keeper.getByText('Done: flushed, air on full').waitFor()
     await expectSound(keeper, 'bath-stopped-390')

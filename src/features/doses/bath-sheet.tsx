@@ -1,10 +1,12 @@
-import { useState } from 'react'
+import { useEffect, useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Navigate } from 'react-router-dom'
 import type { UseQueryResult } from '@tanstack/react-query'
 import type { BathSheet as BathSheetReply } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
+import { useWithoutSignal } from '../../lib/use-without-signal.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import { Button } from '../../ui/button.tsx'
@@ -12,7 +14,7 @@ import { ButtonLink } from '../../ui/button-link.tsx'
 import { ListFetching, ListUnreadable } from '../../ui/list-states.tsx'
 import { PhoneSheet } from '../../ui/phone-frame.tsx'
 import { HoldDialog } from './hold-dialog.tsx'
-import { sheetQuery } from './queries.ts'
+import { keepRunning, keptRunningQuery, sheetQuery } from './queries.ts'
 import { SecondCalculation } from './second-calculation.tsx'
 import { doseToOpen, othersMayAct, sheetMode, waitsForOthers } from './sheet-model.ts'
 import type { SheetPart } from './sheet-model.ts'
@@ -31,7 +33,7 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   const { zone } = useMe().facility
   const blind = useQuery({
     ...sheetQuery(number, doseKey, true),
-    refetchInterval: ({ state }) => (state.data && waitsForOthers(state.data) ? lookAgainMs : false),
+    refetchInterval: ({ state }) => (looksAgain(state.data, state.error !== null) ? lookAgainMs : false),
   })
   const mode = blind.data ? sheetMode(blind.data, part) : null
   const whole = useQuery({
@@ -40,7 +42,12 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
     refetchInterval: ({ state }) => (state.data && othersMayAct(state.data) ? lookAgainMs : false),
   })
   const query = mode === 'whole' ? whole : blind
-  if (!query.data) return <NotYet number={number} query={query} />
+  const running = query.data?.state === 'running' ? query.data : null
+  useEffect(() => {
+    if (running) void keepRunning(running)
+  }, [running])
+  useWithoutSignal()
+  if (!query.data) return <NotYet number={number} query={query} doseKey={doseKey} />
   if (mode === 'blind') return <BlindSheet sheet={query.data} zone={zone} />
   return (
     <WholeSheet
@@ -51,6 +58,12 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
       onLookAgain={() => void query.refetch()}
     />
   )
+}
+
+/** Whether the sheet is read again by itself: somebody else may act on it, or nobody answered. */
+function looksAgain(sheet: BathSheetReply | undefined, failed: boolean): boolean {
+  if (failed || sheet === undefined) return failed
+  return waitsForOthers(sheet) || (!sheet.blind && othersMayAct(sheet))
 }
 
 /** The sheet of an order without a dose in its address: leads to the dose that is meant now. */
@@ -90,9 +103,19 @@ function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
   )
 }
 
-function NotYet({ number, query }: { number: string; query: UseQueryResult<BathSheetReply> }) {
+function NotYet({
+  number,
+  doseKey = null,
+  query,
+}: {
+  number: string
+  doseKey?: string | null
+  query: UseQueryResult<BathSheetReply>
+}) {
   const problem = isProblem(query.error) ? query.error : null
   const missing = problem?.code === 'not-found' || problem?.code === 'bad-input'
+  if (problem?.noAnswer && doseKey !== null)
+    return <WithoutAnswer number={number} doseKey={doseKey} onRetry={() => void query.refetch()} />
   return (
     <PhoneSheet
       back={{ to: paths.order(number), label: words.backToOrder({ number }) }}
@@ -110,5 +133,51 @@ function NotYet({ number, query }: { number: string; query: UseQueryResult<BathS
         <ListFetching what={number} />
       )}
     </PhoneSheet>
+  )
+}
+
+/** Nobody answers: the bath that runs as it was kept, else nothing but the hold, which needs no answer. */
+function WithoutAnswer({
+  number,
+  doseKey,
+  onRetry,
+}: {
+  number: string
+  doseKey: string
+  onRetry: () => void
+}) {
+  const { zone } = useMe().facility
+  const hold = useMay('order.hold')
+  const kept = useQuery(keptRunningQuery(number, doseKey))
+  const [holdAt, setHoldAt] = useState<string | null>(null)
+  const now = new Date().toISOString()
+  if (kept.data)
+    return (
+      <WholeSheet
+        sheet={kept.data.value}
+        zone={zone}
+        receivedMs={Date.parse(kept.data.at)}
+        isKept
+        onLookAgain={onRetry}
+      />
+    )
+  return (
+    <>
+      <PhoneSheet
+        back={{ to: paths.order(number), label: words.backToOrder({ number }) }}
+        title={words.sheetOf({ number })}
+        foot={
+          hold.allowed ? (
+            <Button kind="hold" size="touch" onClick={() => setHoldAt(now)}>
+              {words.hold}
+            </Button>
+          ) : undefined
+        }
+      >
+        <UnsentActs number={number} doseId={null} zone={zone} now={now} />
+        <ListUnreadable why={words.holdBlind} onRetry={onRetry} />
+      </PhoneSheet>
+      {holdAt === null ? null : <HoldDialog number={number} now={holdAt} onBack={() => setHoldAt(null)} />}
+    </>
   )
 }

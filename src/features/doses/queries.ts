@@ -1,6 +1,8 @@
 import { queryOptions } from '@tanstack/react-query'
 import { getBathSheet, printBathSheet } from '../../../shared/contracts/doses.contract.ts'
+import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { addressOf, api } from '../../lib/api-client.ts'
+import { keep, readKept } from '../../lib/kept.ts'
 
 export const dosesKey = ['doses'] as const
 
@@ -13,6 +15,22 @@ export const sheetQuery = (number: string, key: string, blind: boolean) =>
     queryKey: [...dosesKey, number, key, blind ? 'blind' : 'whole'],
     queryFn: ({ signal }) =>
       api(getBathSheet, { params: { number, key }, query: blind ? { blind: 'yes' as const } : {}, signal }),
+    staleTime: 0,
+  })
+
+const runningKey = (number: string, key: string) => `running bath ${number} ${key}`
+
+/** A bath that runs is kept on the device: it is timed and stopped without a signal too. */
+export async function keepRunning(sheet: BathSheet): Promise<void> {
+  await keep(runningKey(sheet.number, sheet.key), sheet)
+}
+
+/** The running bath as it was when the server last answered; null where none was kept. */
+export const keptRunningQuery = (number: string, key: string) =>
+  queryOptions({
+    queryKey: [...dosesKey, number, key, 'kept'],
+    queryFn: () => readKept<BathSheet>(runningKey(number, key)),
+    networkMode: 'always',
     staleTime: 0,
   })
 

@@ -36,11 +36,8 @@ export function UnsentActs({
 
 function UnsentAct({ item, heading, body }: { item: OutboxItem; heading: string; body: string }) {
   return (
-    <div role="status">
-      <Banner icon={CloudOff} act={<Link to={paths.unsent()}>{words.toUnsent}</Link>}>
-        <b>{heading}</b>{' '}
-        <span>{item.refusal === null ? body : `${words.notTaken} ${item.refusal.says}`}</span>
-      </Banner>
-    </div>
+    <Banner icon={CloudOff} act={<Link to={paths.unsent()}>{words.toUnsent}</Link>}>
+      <b>{heading}</b> <span>{item.refusal === null ? body : `${words.notTaken} ${item.refusal.says}`}</span>
+    </Banner>
   )
 }

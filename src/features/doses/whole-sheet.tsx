@@ -1,11 +1,13 @@
 import { useState } from 'react'
-import { Plus } from 'lucide-react'
+import { Plus, WifiOff } from 'lucide-react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words, timerWords } from '../../../shared/messages/doses-screens.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { useUnsent } from '../../lib/stop-entries.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
+import { Banner } from '../../ui/banner.tsx'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { PhoneSheet } from '../../ui/phone-frame.tsx'
@@ -40,11 +42,14 @@ export function WholeSheet({
   sheet,
   zone,
   receivedMs,
+  isKept = false,
   onLookAgain,
 }: {
   sheet: BathSheet
   zone: string
   receivedMs: number
+  /** Nobody answers, and it stands as it was kept. */
+  isKept?: boolean
   onLookAgain: () => void
 }) {
   const [front, setFront] = useState<Front | null>(null)
@@ -87,6 +92,9 @@ export function WholeSheet({
           )
         }
       >
+        {isKept ? (
+          <Banner icon={WifiOff}>{words.keptSheet({ at: sayMoment(sheet.now, zone, sheet.now) })}</Banner>
+        ) : null}
         <UnsentActs number={sheet.number} doseId={record?.id ?? null} zone={zone} now={sheet.now} />
         <Standing sheet={sheet} zone={zone} />
         {act === 'in-the-water' ? (
