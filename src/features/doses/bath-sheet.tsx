@@ -6,7 +6,6 @@ import type { BathSheet as BathSheetReply } from '../../../shared/contracts/dose
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
-import { useWithoutSignal } from '../../lib/use-without-signal.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import { Button } from '../../ui/button.tsx'
@@ -46,7 +45,6 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   useEffect(() => {
     if (running) void keepRunning(running)
   }, [running])
-  useWithoutSignal()
   if (!query.data) return <NotYet number={number} query={query} doseKey={doseKey} />
   if (mode === 'blind') return <BlindSheet sheet={query.data} zone={zone} />
   return (
