@@ -31,6 +31,8 @@ export const problemStatus = {
   'in-the-future': 422,
   busy: 503,
   'file-missing': 422,
+  'file-gone': 410,
+  'file-damaged': 500,
   'file-too-large': 422,
   'file-type-not-allowed': 422,
   'broken-record': 409,

@@ -26,6 +26,8 @@ export const problemTitles = defineMessages({
   'in-the-future': 'This time lies in the future',
   busy: 'The record is being changed by somebody else',
   'file-missing': 'No file arrived',
+  'file-gone': 'This file is no longer where it was kept',
+  'file-damaged': 'This file is not as it was kept',
   'file-too-large': 'The file is too large',
   'file-type-not-allowed': 'Files of this type are not accepted',
   'broken-record': 'This signed record no longer matches its signature',

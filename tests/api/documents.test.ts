@@ -1,6 +1,9 @@
 import { createHash } from 'node:crypto'
+import { rm, writeFile } from 'node:fs/promises'
+import path from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Response } from 'superagent'
+import { verifyFiles } from '../../server/platform/files/verify-files.ts'
 import { aPlace, aStingray } from '../builders/a-collection.ts'
 import { anAcquisition, aPermit, newLine, pdfBytes } from '../builders/a-register.ts'
 import { newKey, startApi } from '../support/api.ts'
@@ -38,6 +41,49 @@ async function upload(given: UploadGiven = {}): Promise<Response> {
 }
 
 describe('a paper', () => {
+  it('is not given out once its file was altered or lost, and both are found and put on record', async () => {
+    const bytes = pdfBytes('a paper that somebody alters')
+    const { body } = await upload({ bytes, title: 'Altered on the disk' })
+    const { dataFolder, files } = api.composition.parts
+    const { sha256 } = body as { sha256: string }
+    const place = path.join(dataFolder, 'files', sha256.slice(0, 2), sha256)
+    const faults = async () =>
+      (await verifyFiles(files, await api.composition.documents.filesOnRecord())).faults
+    expect(await faults()).toEqual([])
+    const { agent } = await api.as('keeper')
+    const fetched = () => agent.get(`/api/documents/${String(body.id)}/file`)
+
+    await writeFile(place, Buffer.concat([bytes, Buffer.from('%')]))
+    const altered = await fetched()
+    expect(altered.status).toBe(500)
+    expect(altered.body.code).toBe('file-damaged')
+    expect(altered.body.detail).toMatch(/backup/)
+    expect(await faults()).toMatchObject([{ at: 'Altered on the disk', what: 'damaged' }])
+
+    await rm(place)
+    const lost = await fetched()
+    expect(lost.status).toBe(410)
+    expect(lost.body.code).toBe('file-gone')
+    expect(await faults()).toMatchObject([{ at: 'Altered on the disk', what: 'missing' }])
+
+    const actions: { action: string }[] = await api.composition.parts.dataSource.query(
+      `SELECT a.action FROM audit_entries a WHERE a.action LIKE 'file.find-%' ORDER BY a.seq`,
+    )
+    expect(actions.map(({ action }) => action)).toEqual(['file.find-damaged', 'file.find-gone'])
+    // brought again, it is there again
+    await upload({ bytes })
+    await fetched().expect(200)
+    expect(await faults()).toEqual([])
+  })
+
+  it('has no title that nothing could show again', async () => {
+    const reply = await upload({ title: 'Loan\u0000agreement' })
+    expect(reply.status).toBe(422)
+    expect(reply.body.errors).toEqual([
+      { pointer: '/title', detail: expect.stringMatching(/cannot be written/) },
+    ])
+  })
+
   it('is kept under its hash and comes back exactly as it was sent', async () => {
     const bytes = pdfBytes('a paper of its own')
     const reply = await upload({ bytes, name: 'Vertrag für Brine.pdf' })

@@ -1,6 +1,7 @@
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import type { DocumentKind } from '../../../shared/domain/register/document-kinds.ts'
 import type { Db } from '../../platform/database/db.ts'
+import type { FileOnRecord } from '../../platform/files/serve-kept.ts'
 
 export interface DocumentReadRow {
   id: string
@@ -62,4 +63,9 @@ export function readPrints(db: Db, digits: string): Promise<PrintReadRow[]> {
        FROM document_prints r WHERE r.fingerprint LIKE $1 || '%' ORDER BY r.printed_at DESC, r.id`,
     [digits],
   )
+}
+
+/** Every paper ever attached, with the file it stands on. */
+export function readFilesOnRecord(db: Db): Promise<FileOnRecord[]> {
+  return db.query(`SELECT d.id, d.sha256, d.title AS label FROM documents d ORDER BY d.recorded_at, d.id`)
 }

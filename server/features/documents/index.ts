@@ -3,11 +3,12 @@ import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.
 import { permissionWords } from '../../../shared/messages/permissions.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { FileStore } from '../../platform/files/file-store.ts'
+import { createFileServer } from '../../platform/files/serve-kept.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import { DocumentPrint, DocumentRecord, DocumentVoid } from './document.entity.ts'
 import { presentDocument, presentPrints } from './documents.present.ts'
-import { readDocument, readDocumentsOf, readPrints } from './documents.reads.ts'
+import { readDocument, readDocumentsOf, readFilesOnRecord, readPrints } from './documents.reads.ts'
 import { documentRoutes } from './documents.routes.ts'
 import type { DocumentQueries } from './documents.routes.ts'
 import { createDocumentsService } from './documents.service.ts'
@@ -20,7 +21,8 @@ export type { PrintReadRow } from './documents.reads.ts'
 export const documentEntities = [DocumentRecord, DocumentVoid, DocumentPrint]
 
 export function createDocuments(parts: Parts & { files: FileStore }) {
-  const { dataSource, files } = parts
+  const { dataSource } = parts
+  const serve = createFileServer(parts)
   const service = createDocumentsService(parts)
   const prints = createPrintStates()
   const queries: DocumentQueries = {
@@ -36,7 +38,7 @@ export function createDocuments(parts: Parts & { files: FileStore }) {
         throw new Problem('may-not', {
           detail: permissionWords.whoMay({ roles: rolesThatMay(row.read_action) }),
         })
-      const { body } = await files.read(row.sha256)
+      const body = await serve(context, 'document', { ...row, label: row.title })
       return { contentType: row.media_type, fileName: row.file_name, body }
     },
     async check(typed) {
@@ -68,6 +70,8 @@ export function createDocuments(parts: Parts & { files: FileStore }) {
     prints,
     /** One paper on file. */
     documentOf: queries.document,
+    /** Every paper on file, also a struck one, for comparing the disk with the records. */
+    filesOnRecord: () => readFilesOnRecord(dataSource),
     /** The papers of some records of one kind, by the id of the record. */
     async documentsOf(parentKind: string, parentIds: readonly string[], db: Db = dataSource) {
       const rows = parentIds.length > 0 ? await readDocumentsOf(db, parentKind, parentIds) : []

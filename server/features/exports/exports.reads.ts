@@ -1,6 +1,7 @@
 import { containing } from '../../platform/database/like.ts'
 import type { ExportFormat } from '../../../shared/domain/register/export-formats.ts'
 import type { Db } from '../../platform/database/db.ts'
+import type { FileOnRecord } from '../../platform/files/serve-kept.ts'
 
 export interface ExportReadRow {
   id: string
@@ -54,4 +55,9 @@ export async function readExports(
   )
   const [count]: { n: string }[] = await db.query(`SELECT count(*) AS n FROM ${joins} WHERE ${where}`, values)
   return { rows, total: Number(count?.n ?? 0) }
+}
+
+/** Every export ever made, with the file it stands on. */
+export function readFilesOnRecord(db: Db): Promise<FileOnRecord[]> {
+  return db.query(`SELECT x.id, x.sha256, x.file_name AS label FROM exports x ORDER BY x.exported_at, x.id`)
 }

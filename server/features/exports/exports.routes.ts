@@ -11,7 +11,7 @@ import type { HistoryPeriod } from './read-history.ts'
 export interface ExportQueries {
   history(context: RequestContext, accession: string, period: HistoryPeriod): Promise<History>
   exportOf(id: string): Promise<ExportRow>
-  file(id: string): Promise<FileReply>
+  file(context: RequestContext, id: string): Promise<FileReply>
   exports(filter: ExportFilter): Promise<{ rows: ExportRow[]; total: number }>
 }
 
@@ -24,7 +24,7 @@ export function exportRoutes(service: ExportsService, queries: ExportQueries): R
       await service.exportHistory(context, params.accession, body)
       return queries.exportOf(body.id)
     }),
-    route(contracts.getExportFile, ({ params }) => queries.file(params.id)),
+    route(contracts.getExportFile, ({ params, context }) => queries.file(context, params.id)),
     route(contracts.listExports, async ({ query }) => {
       const page = pageOf(query)
       const { rows, total } = await queries.exports({ ...query, ...page })

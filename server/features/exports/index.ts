@@ -1,5 +1,6 @@
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { FileStore } from '../../platform/files/file-store.ts'
+import { createFileServer } from '../../platform/files/serve-kept.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
@@ -8,7 +9,7 @@ import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { ExportRecord } from './export.entity.ts'
 import { presentExport } from './exports.present.ts'
-import { readExport, readExports } from './exports.reads.ts'
+import { readExport, readExports, readFilesOnRecord } from './exports.reads.ts'
 import { exportRoutes } from './exports.routes.ts'
 import type { ExportQueries } from './exports.routes.ts'
 import { createExportsService, historyPrintKind } from './exports.service.ts'
@@ -27,7 +28,8 @@ export function createExports(
     pdf: PdfPool
   },
 ) {
-  const { dataSource, clock, files, documents } = parts
+  const { dataSource, clock, documents } = parts
+  const serve = createFileServer(parts)
   const service = createExportsService(parts)
   const now = () => clock.now().toISOString()
 
@@ -62,9 +64,9 @@ export function createExports(
       }
     },
     exportOf: async (id) => presentExport(await rowOf(id)),
-    async file(id) {
+    async file(context, id) {
       const row = await rowOf(id)
-      const { body } = await files.read(row.sha256)
+      const body = await serve(context, 'export', { ...row, label: row.file_name })
       return { contentType: row.media_type, fileName: row.file_name, body }
     },
     async exports(filter) {
@@ -72,7 +74,9 @@ export function createExports(
       return { rows: rows.map(presentExport), total }
     },
   }
-  return { service, routes: exportRoutes(service, queries) }
+  /** Every export on record, for comparing the disk with the records. */
+  const filesOnRecord = () => readFilesOnRecord(dataSource)
+  return { service, filesOnRecord, routes: exportRoutes(service, queries) }
 }
 
 export type Exports = ReturnType<typeof createExports>

@@ -1,9 +1,8 @@
 import { createHash, randomBytes } from 'node:crypto'
 import { createReadStream } from 'node:fs'
-import { mkdir, open, rename, rm } from 'node:fs/promises'
+import { mkdir, open, readFile, rename, rm } from 'node:fs/promises'
 import path from 'node:path'
 import { pipeline } from 'node:stream/promises'
-import type { Readable } from 'node:stream'
 import { fileWords } from '../../../shared/messages/files.ts'
 import { Problem } from '../http/problem.ts'
 
@@ -18,14 +17,17 @@ export interface FileStore {
   /** Writes the whole file or nothing, and returns only when it is on the disk. */
   keep(content: Uint8Array): Promise<KeptFile>
   /**
-   * A stream over a kept file.
+   * The whole of a kept file, read and compared with the SHA-256 it is named after: nothing else is ever given out.
    *
-   * @throws Problem not-found when no such file is kept
+   * @throws Problem not-found for a name that no file has, file-gone when it is no longer on the disk, file-damaged when
+   *         its content is not what was kept
    */
-  read(sha256: string): Promise<{ bytes: number; body: Readable }>
+  read(sha256: string): Promise<Uint8Array>
   /** Whether a kept file still has the content it is named after; `missing` when it is gone. */
   check(sha256: string): Promise<'sound' | 'damaged' | 'missing'>
 }
+
+const hashOf = (content: Uint8Array): string => createHash('sha256').update(content).digest('hex')
 
 /** Opens the store in a folder, which is made with the first file. */
 export function createFileStore(folder: string): FileStore {
@@ -46,7 +48,7 @@ export function createFileStore(folder: string): FileStore {
   return {
     check,
     keep: async (content) => {
-      const sha256 = createHash('sha256').update(content).digest('hex')
+      const sha256 = hashOf(content)
       const place = placeOf(sha256)
       // A damaged copy is written anew by the next person who brings the same content.
       if ((await check(sha256)) !== 'sound') await writeWhole(folder, place, content)
@@ -54,13 +56,12 @@ export function createFileStore(folder: string): FileStore {
     },
     read: async (sha256) => {
       const place = placeOf(sha256)
-      try {
-        const file = await open(place)
-        return { bytes: (await file.stat()).size, body: file.createReadStream() }
-      } catch (error) {
-        if (isMissing(error)) throw new Problem('not-found', { detail: fileWords.notKept })
+      const content = await readFile(place).catch((error: unknown) => {
+        if (isMissing(error)) throw new Problem('file-gone', { detail: fileWords.gone })
         throw error
-      }
+      })
+      if (hashOf(content) !== sha256) throw new Problem('file-damaged', { detail: fileWords.damaged })
+      return content
     },
   }
 }
