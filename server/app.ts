@@ -18,8 +18,8 @@ import { securityHeaders } from './platform/http/security-headers.ts'
 import { problemEdge, unknownRoute } from './platform/http/to-problem.ts'
 
 const sessionHours = 8
-/** Sign-in attempts from one address in a quarter of an hour, over all accounts. */
-const signInsPerAddress = 60
+/** Sign-ins that fail from one address in a quarter of an hour, over all accounts: a whole house may stand behind one. */
+const failedSignInsPerAddress = 300
 
 export interface AppParts {
   config: Pick<Config, 'sessionSecret' | 'publicUrl' | 'mode'>
@@ -77,13 +77,14 @@ export function createApp({ config, composition, pages }: AppParts): { app: Expr
     '/sign-in',
     rateLimit({
       windowMs: 15 * 60_000,
-      limit: signInsPerAddress,
+      limit: failedSignInsPerAddress,
+      skipSuccessfulRequests: true,
       store: createRateLimitStore(parts.dataSource, 'sign-in'),
       standardHeaders: 'draft-8',
       legacyHeaders: false,
       handler: () => {
         throw new Problem('too-many-requests', {
-          detail: 'Too many sign-ins from this address. Wait 15 min.',
+          detail: 'Too many sign-ins from this address failed. Wait 15 min.',
           extra: { retry_after_seconds: 900 },
         })
       },

@@ -128,6 +128,7 @@ export function compose(outside: Outside) {
   })
   return {
     parts,
+    lockout,
     authenticator,
     facility,
     people,

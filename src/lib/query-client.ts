@@ -23,7 +23,9 @@ export function createQueryClient(): QueryClient {
   })
   function noticeSession(error: unknown): void {
     if (isProblem(error, 'not-signed-in')) client.setQueryData(meKey, null)
-    if (isProblem(error, 'password-change-required')) void client.invalidateQueries({ queryKey: meKey })
+    // roles may have been withdrawn since this page was drawn
+    if (isProblem(error, 'password-change-required', 'may-not'))
+      void client.invalidateQueries({ queryKey: meKey })
   }
   return client
 }

@@ -280,4 +280,19 @@ describe('licences', () => {
     })
     expect((await vet.agent.get('/api/me')).body.mayPractise).toBe(false)
   })
+
+  it('voids no licence under a key that was sent with another reason', async () => {
+    const admin = await api.as('administrator')
+    const entered = licence('2026-01-01', '2027-01-01')
+    await admin.agent.post(`/api/people/${admin.id}/licences`).send(entered).expect(201)
+    const key = newKey()
+    const voidIt = (reason: string) =>
+      admin.agent
+        .post(`/api/people/${admin.id}/licences/${entered.id}/void`)
+        .set('Idempotency-Key', key)
+        .send({ reason })
+    await voidIt('number mistyped').expect(200)
+    await voidIt('number mistyped').expect(200)
+    expect((await voidIt('another reason').expect(409)).body.code).toBe('idempotency-key-reused')
+  })
 })

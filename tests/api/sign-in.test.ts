@@ -69,6 +69,81 @@ describe('sign-in', () => {
     },
   )
 
+  it('locks only where the wrong tries came from, and not a house of many people', async () => {
+    const email = 'elsewhere@harrow-point.example'
+    await api.person({ email, printedName: 'Guessed At', roles: ['keeper'] })
+    const { lockout } = api.composition
+    for (let i = 0; i < 5; i++)
+      await lockout.note({ emailKey: email, address: '203.0.113.9', succeeded: false })
+    expect(await lockout.minutesLocked({ emailKey: email, address: '203.0.113.9' })).toBe(15)
+    await api.anonymous().post('/api/sign-in').send({ email, password }).expect(200)
+    // guessing from many addresses at once is still stopped
+    for (let i = 0; i < 50; i++)
+      await lockout.note({ emailKey: email, address: `203.0.113.${String(i)}`, succeeded: false })
+    await api.anonymous().post('/api/sign-in').send({ email, password }).expect(429)
+    // a shift begins: more people than were once let in from one address
+    const keeper = { email: 'keeper@harrow-point.example', password }
+    for (let batch = 0; batch < 8; batch++) {
+      const replies = await Promise.all(
+        Array.from({ length: 8 }, () => api.anonymous().post('/api/sign-in').send(keeper)),
+      )
+      expect(new Set(replies.map(({ status }) => status))).toEqual(new Set([200]))
+    }
+  })
+
+  it('stops an address at which sign-ins fail again and again', async () => {
+    let status = 0
+    let tries = 0
+    for (; status !== 429 && tries < 400; tries += 20) {
+      const replies = await Promise.all(
+        Array.from({ length: 20 }, () => api.anonymous().post('/api/sign-in').send({})),
+      )
+      status = Math.max(...replies.map((reply) => reply.status))
+    }
+    expect(status).toBe(429)
+    expect(tries).toBeGreaterThan(200)
+    await api.composition.parts.dataSource.query(`DELETE FROM rate_limits`)
+  })
+
+  it('ends the other sessions of whoever changes their password', async () => {
+    const here = await api.person({
+      email: 'twice@harrow-point.example',
+      printedName: 'Two Devices',
+      roles: ['keeper'],
+    })
+    const there = request.agent(api.app)
+    await there.post('/api/sign-in').send({ email: here.email, password }).expect(200)
+    await here.agent
+      .post('/api/me/password')
+      .send({ currentPassword: password, newPassword: 'long enough now' })
+      .expect(200)
+    await here.agent.get('/api/me').expect(200)
+    await there.get('/api/me').expect(401)
+  })
+
+  it('takes a withdrawn role away at once, in a session that is open', async () => {
+    const admin = await api.as('administrator')
+    const person = await api.person({
+      email: 'was-registrar@harrow-point.example',
+      printedName: 'Was Registrar',
+      roles: ['registrar', 'keeper'],
+    })
+    const { body: row } = await admin.agent.get(`/api/people/${person.id}`).expect(200)
+    const exportsOf = () => person.agent.post('/api/taxa').send({})
+    expect((await exportsOf()).status).toBe(422)
+    await admin.agent
+      .put(`/api/people/${person.id}`)
+      .send({
+        email: person.email,
+        printedName: person.printedName,
+        roles: ['keeper'],
+        active: true,
+        expectedVersion: row.version,
+      })
+      .expect(200)
+    expect((await exportsOf()).status).toBe(403)
+  })
+
   it('answers 401 to signed-out calls before any parameter is read', async () => {
     const reply = await api.anonymous().get('/api/people/not-an-id').expect(401)
     expect(reply.body.code).toBe('not-signed-in')

@@ -86,7 +86,10 @@ export async function insertLicenceVoid(tx: Tx, row: LicenceVoid): Promise<void>
   await tx.manager.insert(LicenceVoid, row)
 }
 
-/** Ends every session of a person, on whatever device. */
-export async function endSessions(tx: Tx, personId: string): Promise<void> {
-  await tx.manager.query(`DELETE FROM session WHERE sess -> 'passport' ->> 'user' = $1`, [personId])
+/** Ends every session of a person, on whatever device, but the one named. */
+export async function endSessions(tx: Tx, personId: string, kept: string | null = null): Promise<void> {
+  await tx.manager.query(
+    `DELETE FROM session WHERE sess -> 'passport' ->> 'user' = $1 AND sid IS DISTINCT FROM $2`,
+    [personId, kept],
+  )
 }

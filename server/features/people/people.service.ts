@@ -133,9 +133,10 @@ export function createPeopleService(parts: PeopleParts) {
       return { oneTimePassword: issued ? password : null }
     },
 
+    /** Changes the password and ends the person's sessions but the one in which it was changed. */
     async changeOwnPassword(
       context: RequestContext,
-      given: { currentPassword: string; newPassword: string },
+      given: { currentPassword: string; newPassword: string; sessionKept: string },
     ): Promise<void> {
       const id = context.actor.personId
       const current = id === null ? null : await parts.readPasswordHash(id)
@@ -153,6 +154,7 @@ export function createPeopleService(parts: PeopleParts) {
       const passwordHash = await hashPassword(given.newPassword)
       await parts.transactions.inTransaction(context, async (tx) => {
         await repository.setPassword(tx, id, passwordHash, false)
+        await repository.endSessions(tx, id, given.sessionKept)
         tx.audit({
           action: 'person.change-password',
           subject: { kind: 'person', id, label: context.actor.printedName },

@@ -76,15 +76,15 @@ export function signInRoutes(parts: SignInParts): Route[] {
   const { authenticator, lockout, people, readMe } = parts
   return [
     route(contracts.signIn, async ({ body, req, context }): Promise<Me> => {
-      const emailKey = body.email.toLowerCase()
-      const minutes = await lockout.minutesLocked(emailKey)
+      const tried = { emailKey: body.email.toLowerCase(), address: req.ip ?? '' }
+      const minutes = await lockout.minutesLocked(tried)
       if (minutes > 0)
         throw new Problem('sign-in-locked', {
           detail: `Wait ${String(minutes)} min, then try again, or ask an administrator for a one-time password.`,
           extra: { retry_after_seconds: minutes * 60 },
         })
       const person = await authenticate(authenticator, req)
-      await lockout.note({ emailKey, address: req.ip ?? '', succeeded: person !== null })
+      await lockout.note({ ...tried, succeeded: person !== null })
       if (!person)
         throw new Problem('sign-in-failed', {
           detail: 'Check both. 5 wrong tries lock the account for 15 minutes.',
@@ -103,7 +103,7 @@ export function signInRoutes(parts: SignInParts): Route[] {
     }),
     route(contracts.getMe, async ({ req }) => readMe(mustBeSignedIn(req))),
     route(contracts.changePassword, async ({ body, context, req }) => {
-      await people.service.changeOwnPassword(context, body)
+      await people.service.changeOwnPassword(context, { ...body, sessionKept: req.sessionID })
       return readMe({ ...mustBeSignedIn(req), mustChangePassword: false })
     }),
     route(contracts.setPreference, async ({ params, body, context, req }) => {

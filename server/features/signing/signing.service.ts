@@ -75,15 +75,16 @@ export function createSigningService(parts: SigningParts) {
           detail:
             'You can write, hold and stop. To sign, ask the administrator to enter a licence valid today.',
         })
-      const key = `sign:${personId}`
-      const minutes = await parts.lockout.minutesLocked(key)
+      // of the signer, wherever they sign
+      const tried = { emailKey: `sign:${personId}`, address: '' }
+      const minutes = await parts.lockout.minutesLocked(tried)
       if (minutes > 0)
         throw new Problem('sign-in-locked', {
           detail: `Wait ${String(minutes)} min before signing again.`,
           extra: { retry_after_seconds: minutes * 60 },
         })
       const right = await isPassword((await parts.readPasswordHash(personId)) ?? '', password)
-      await parts.lockout.note({ emailKey: key, address: '', succeeded: right })
+      await parts.lockout.note({ ...tried, succeeded: right })
       if (!right)
         throw new Problem('password-wrong', {
           detail: 'Nothing was signed. Type your own password.',
