@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { animalForms } from '../domain/animals/description.ts'
 import { transactionKindNames } from '../domain/register/transaction-kinds.ts'
 import { NewAcquisition, NewDisposition } from './acquisition-bodies.ts'
+import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { contract } from './contract.ts'
 import { AttachedDocument, UploadFields } from './documents.contract.ts'
 import { PermitKindName, PermitMarkName } from './permits.contract.ts'
@@ -236,7 +237,7 @@ export const attachTransactionDocument = contract({
   method: 'post',
   path: '/register/transactions/:number/documents',
   action: 'document.attach',
-  summary: 'Attach a paper to a transaction: one file of at most 10 MB with its fields beside it',
+  summary: `Attach a paper to a transaction: one file of at most ${String(fileLimitMB)} MB with its fields beside it`,
   params: transactionParams,
   body: UploadFields,
   reply: { 201: AttachedDocument },

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { permitKinds, purposeCodes } from '../domain/register/permit-kinds.ts'
+import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { contract } from './contract.ts'
 import { AttachedDocument, UploadFields } from './documents.contract.ts'
 import { Instant, listQuery, LocalDate, May, page, Reason, RecordId } from './primitives.ts'
@@ -187,7 +188,7 @@ export const attachPermitDocument = contract({
   method: 'post',
   path: '/register/permits/:number/documents',
   action: 'document.attach',
-  summary: 'Attach a paper to a permit: one file of at most 10 MB with its fields beside it',
+  summary: `Attach a paper to a permit: one file of at most ${String(fileLimitMB)} MB with its fields beside it`,
   params: permitParams,
   body: UploadFields,
   reply: { 201: AttachedDocument },

@@ -1,3 +1,4 @@
+import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { defineMessages } from './define-messages.ts'
 
 /** Words about papers on file and about looking up a print. */
@@ -8,7 +9,7 @@ export const paperWords = defineMessages({
   title: 'What it is called',
   kind: 'Kind of paper',
   file: 'File',
-  fileHint: 'PDF, picture, CSV or text, at most 15 MB.',
+  fileHint: `PDF, picture, CSV or text, at most ${String(fileLimitMB)} MB.`,
   fileNeeded: 'Choose a file.',
   needed: 'Fill this in.',
   back: 'Not now',

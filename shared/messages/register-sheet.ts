@@ -1,3 +1,4 @@
+import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 /** Words of the register's lists and forms of transactions. */
@@ -139,7 +140,7 @@ export const transactionFormWords = defineMessages({
   removePermit: (p: { n: number }) => `Take permit ${String(p.n)} away`,
   noPermits: 'No permit is used.',
   papers: 'Papers',
-  papersHint: 'PDF, picture, CSV or text, at most 15 MB each.',
+  papersHint: `PDF, picture, CSV or text, at most ${String(fileLimitMB)} MB each.`,
   addPaper: 'Add a paper',
   removePaper: (p: { n: number }) => `Take paper ${String(p.n)} away`,
   paperTitle: 'What it is called',

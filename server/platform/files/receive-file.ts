@@ -1,7 +1,9 @@
 import type { Request, RequestHandler, Response } from 'express'
 import multer, { MulterError } from 'multer'
+import { fileLimitMB } from '../../../shared/domain/documents/file-limit.ts'
 import { fileWords } from '../../../shared/messages/files.ts'
 import { Problem } from '../http/problem.ts'
+import { findUnwritableText } from '../http/unwritable-text.ts'
 import { originalName } from './original-name.ts'
 import { keptTypes, sniffType, type KeptType } from './sniff-type.ts'
 
@@ -37,7 +39,7 @@ export interface ReceiveOptions {
 export function createFileReceiver(
   options: ReceiveOptions = {},
 ): (req: Request, res: Response) => Promise<ReceivedForm> {
-  const { field = 'file', limitMB = 15, allowed = keptTypes } = options
+  const { field = 'file', limitMB = fileLimitMB, allowed = keptTypes } = options
   const read: RequestHandler = multer({
     storage: multer.memoryStorage(),
     limits: { fileSize: limitMB * bytesPerMB, files: 1, fields: 50, fieldSize: 256 * 1024, headerPairs: 100 },
@@ -47,10 +49,10 @@ export function createFileReceiver(
       read(req, res, (error: unknown) => {
         if (error) return reject(asProblem(error, field, limitMB))
         try {
-          resolve({
-            file: accepted(req.file, field, allowed),
-            fields: { ...(req.body as object | undefined) },
-          })
+          const fields = { ...(req.body as object | undefined) }
+          const errors = findUnwritableText(fields, '')
+          if (errors.length > 0) throw new Problem('bad-input', { errors, detail: errors[0]?.detail ?? '' })
+          resolve({ file: accepted(req.file, field, allowed), fields })
         } catch (refusal) {
           reject(refusal)
         }
