@@ -192,7 +192,7 @@ export const getBathSheet = contract({
       .describe('Leave every amount out; whoever asks for them is no blind second person any more'),
   }),
   reply: { 200: BathSheet },
-  problems: ['not-found'],
+  problems: ['not-found', 'broken-record'],
 })
 
 export const printBathSheet = contract({
@@ -216,7 +216,14 @@ export const calculateFirst = contract({
   params: doseParams,
   body: z.strictObject({ id: RecordId, lotId: RecordId.describe('Lot in the hand') }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'may-not', 'id-already-used', 'dose-not-possible', 'working-disagrees'],
+  problems: [
+    'not-found',
+    'may-not',
+    'id-already-used',
+    'dose-not-possible',
+    'working-disagrees',
+    'broken-record',
+  ],
   idempotent: 'by-record-id',
 })
 
@@ -243,6 +250,7 @@ export const calculateSecond = contract({
     'first-calculation-missing',
     'calculations-begin-again',
     'bad-input',
+    'broken-record',
   ],
   idempotent: 'by-record-id',
 })
@@ -281,7 +289,7 @@ export const recordDose = contract({
     note: z.string().trim().max(1000).optional().describe('In words'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  problems: ['not-found', 'id-already-used', 'in-the-future', 'broken-record'],
   idempotent: 'by-record-id',
 })
 

@@ -170,6 +170,10 @@ export const OrderRow = z.object({
   signedBy: z.string().nullable().describe('Signer'),
   signedAt: Instant.nullable().describe('When it was signed'),
   versionNo: z.int().nullable().describe('Signed version in force'),
+  record: z
+    .enum(['intact', 'broken'])
+    .nullable()
+    .describe('Broken: the text cannot be read, or what is stored beside it is not what was signed'),
   dosesGiven: z.int().describe('Doses given'),
   doses: z.int().nullable().describe('Doses planned'),
   nextDueAt: Instant.nullable().describe('Next planned dose'),

@@ -12,7 +12,8 @@ export const SignatureBlock = z.object({
       number: z.string().describe('Licence number'),
       validUntil: LocalDate.describe('Last day of validity, as known at signing'),
     })
-    .describe('The licence valid on the day of signing'),
+    .nullable()
+    .describe('The licence valid on the day of signing; null where the text cannot be read any more'),
   meaning: z.string().describe('What the signature means, for example author of this order'),
   signedAt: Instant,
   signedOn: LocalDate.describe('Facility date of signing'),

@@ -5,6 +5,7 @@ export const documentWords = defineMessages({
   page: ({ page, pages }: { page: number; pages: number }) => `Page ${page} of ${pages}`,
   recordCheck: ({ fingerprint }: { fingerprint: string }) => `Record check ${fingerprint}`,
   recordIntact: 'The text matches what was signed',
+  licenceUnreadable: 'signer and licence can’t be read any more',
   recordBroken: 'Record check failed: this is not the text that was signed. Do not act on it.',
   recordUnknownKey: 'Signed with a key that this installation does not know',
   signedAs: ({ meaning }: { meaning: string }) => `Signed as ${meaning}`,

@@ -39,6 +39,7 @@ export const orderListWords = defineMessages({
   next: (p: { at: string }) => `next ${p.at}`,
   since: (p: { at: string }) => `was planned for ${p.at}`,
   signedBy: (p: { name: string; at: string }) => `${p.name}, ${p.at}`,
+  recordBroken: 'Record check failed',
   empty: 'No orders yet',
   emptyBody: 'A veterinarian writes the first one.',
 })

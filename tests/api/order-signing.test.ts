@@ -1,5 +1,6 @@
 import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { verifyOrders } from '../../server/features/orders/index.ts'
 import { aTaxon, anAnimal } from '../builders/a-collection.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
@@ -184,5 +185,62 @@ describe('what may be signed: an order', () => {
     })
     await anAnimal(api, { taxonId: shrimp, enclosureId: water.id })
     expect(await sheetNow()).toMatchObject({ stops: 1, ceiling: { level: 'stop', overridden: null } })
+  })
+
+  it('is broken when what is stored beside the text was changed in the database, and says so wherever it is shown', async () => {
+    const draft = await aDraft(api, praziFields())
+    expect((await signDraft(api, draft)).status).toBe(201)
+    const { agent } = await api.as('technician')
+    const url = `/api/orders/${draft.number}`
+    const listed = async () =>
+      (await agent.get(`/api/orders?q=${draft.number}`).expect(200)).body.rows[0] as Record<string, unknown>
+    const verify = () =>
+      verifyOrders(api.composition.parts.dataSource, api.composition.signing.service.signer)
+    expect(await listed()).toMatchObject({ record: 'intact', amountText: '4.36\u00a0g' })
+    expect((await verify()).faults).toEqual([])
+    const change = (set: string) =>
+      owner.query(`UPDATE order_versions SET ${set} WHERE order_id = $1`, [draft.id])
+    const other = await aSchool(api, tank.id, 2)
+    for (const [set, back, name] of [
+      ['amount_entered_value = 43.6', 'amount_entered_value = 4.36', 'amount_entered_value'],
+      ["starts_at = starts_at + interval '1 day'", "starts_at = starts_at - interval '1 day'", 'starts_at'],
+      ['doses = 3', 'doses = 1', 'doses'],
+    ] as const) {
+      await change(set)
+      // what is shown is what was signed, and it is said that something differs
+      expect(await listed()).toMatchObject({
+        record: 'broken',
+        amountText: '4.36\u00a0g',
+        doses: 1,
+        startsAt: '2026-12-01T19:00:00.000Z',
+      })
+      expect((await agent.get(url).expect(200)).body.versions[0].signature.state).toBe('broken')
+      expect((await agent.get(`${url}/doses/1`).expect(200)).body).toMatchObject({
+        state: 'broken',
+        mayStart: false,
+      })
+      const first = await agent
+        .post(`${url}/doses/1/first-calculation`)
+        .send({ id: api.nextId(), lotId: prazi.lotId })
+      expect(first.body.code).toBe('broken-record')
+      expect((await verify()).faults).toEqual([
+        { at: `${draft.number} version 1`, what: 'copies', detail: name },
+      ])
+      await change(back)
+    }
+    await owner.query(
+      `UPDATE order_version_animals SET animal_id = $2
+        WHERE order_version_id = (SELECT id FROM order_versions WHERE order_id = $1)`,
+      [draft.id, other.id],
+    )
+    expect((await verify()).faults).toMatchObject([{ what: 'copies', detail: 'animals' }])
+    const print = await agent.get(`${url}/print`).buffer(true).expect(200)
+    expect(textOf(print.body as Buffer)).toContain('Record check failed')
+    // a text that nothing can read: broken, with no date of its own invention
+    await owner.query(`UPDATE signed_texts SET text = 'x' || text WHERE subject_id = $1`, [draft.id])
+    expect(await listed()).toMatchObject({ record: 'broken', amountText: null, phase: 'not-started' })
+    const shown = (await agent.get(url).expect(200)).body.versions[0]
+    expect(shown).toMatchObject({ content: null, signature: { state: 'broken', licence: null } })
+    expect((await agent.get(`${url}/doses/1`).expect(409)).body.code).toBe('broken-record')
   })
 })

@@ -8,7 +8,7 @@ import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import * as repository from './administrations.repository.ts'
 import { compareCalculations, comparedWith } from './compare-calculations.ts'
-import { lockAndRead, personOf, refuseGiver, subjectOf } from './dose-context.ts'
+import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
@@ -47,6 +47,7 @@ export function createCalculations(parts: AdministrationsParts) {
       refuseGiver(context)
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
+        refuseBroken(situation)
         const gone = goneOf(situation)
         if (gone.all)
           throw new Problem('dose-not-possible', {

@@ -1,4 +1,5 @@
 import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { permissionWords } from '../../../shared/messages/permissions.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
@@ -25,6 +26,11 @@ export const subjectOf = ({ row }: DoseSituation) => ({ kind: 'order', id: row.i
 export function personOf(tx: Tx): string {
   if (tx.actor.personId === null) throw new Problem('not-signed-in')
   return tx.actor.personId
+}
+
+/** No dose is prepared from an order that is not what was signed. */
+export function refuseBroken({ block }: DoseSituation): void {
+  if (block.state !== 'intact') throw new Problem('broken-record', { detail: doseWords.notIntact })
 }
 
 /** A bath is given by a veterinarian or technician; what an order opens to keepers is feed and topical. */

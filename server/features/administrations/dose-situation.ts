@@ -132,7 +132,7 @@ export async function readDoseSituation(
   options: { lotId?: string | null; db?: Db } = {},
 ): Promise<DoseSituation> {
   const sealed = await parts.queries.sealed(number, undefined)
-  if (!sealed.content) throw new Problem('not-found', { detail: doseWords.unreadable })
+  if (!sealed.content) throw new Problem('broken-record', { detail: doseWords.unreadable })
   const { content } = sealed
   const { fields } = content
   const plan = planOf(fields, sealed.block)

@@ -30,6 +30,7 @@ import { createOrdersService } from './orders.service.ts'
 import { createOrderPrinter, orderPrintKind } from './print-order.ts'
 import { answerForOrderPrints } from './print-state.ts'
 
+export { verifyOrders } from './verify-orders.ts'
 export { saidCautions } from './say-order.ts'
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'

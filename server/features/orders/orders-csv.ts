@@ -20,4 +20,5 @@ export const ordersCsvColumns: readonly {
   { header: 'next_due_at', value: (row) => row.nextDueAt },
   { header: 'signed_by', value: (row) => row.signedBy },
   { header: 'signed_at', value: (row) => row.signedAt },
+  { header: 'record', value: (row) => row.record },
 ]

@@ -3,15 +3,10 @@ import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
 import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
-import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { differingCopies } from './compare-copies.ts'
+import type { ReadText } from './compare-copies.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { OrderReadRow } from './orders.reads.ts'
-
-interface SignedText {
-  content?: SignedOrder
-  signedBy?: { zone?: string }
-}
 
 /** What is made of a row only once: a list asks each of its rows several things, and some cost much. */
 function oncePerRow<T>(make: (row: OrderReadRow) => T): (row: OrderReadRow) => T {
@@ -23,26 +18,48 @@ function oncePerRow<T>(make: (row: OrderReadRow) => T): (row: OrderReadRow) => T
   }
 }
 
-/** The signed text of a row; null where there is none, or where it is no longer readable. */
-const signedText = oncePerRow((row): SignedText | null => {
+/** A canonical text; null where it is no longer readable: altered in the database, and shown as broken. */
+export function readText(text: string | null): ReadText | null {
   try {
-    return row.signed_text === null ? null : (JSON.parse(row.signed_text) as SignedText)
+    const read: unknown = text === null ? null : JSON.parse(text)
+    return typeof read === 'object' ? (read as ReadText | null) : null
   } catch {
-    // altered in the database: the screens that show the signature say so
     return null
   }
+}
+
+const signedText = oncePerRow((row): ReadText | null => readText(row.signed_text))
+
+/** Whether the version in force can be read and its columns say what was signed; null while none is signed. */
+const recordOf = oncePerRow((row): OrderRow['record'] => {
+  if (row.copies === null) return null
+  return differingCopies({ ...row.copies, order: row }, signedText(row)).length === 0 ? 'intact' : 'broken'
 })
 
 /** What the signature froze beside the content: the zone by whose clock the doses were planned. */
 export const signedZone = (row: OrderReadRow): string => signedText(row)?.signedBy?.zone ?? 'UTC'
 
+/** What the signature says, read for showing; columns beside the text are never shown in its place. */
+export const signedContent = (row: OrderReadRow): SignedOrder | null => signedText(row)?.content ?? null
+
+/** The course that was signed. The columns stand in only for a text that cannot be read, so that the order is not lost. */
+function courseOf(row: OrderReadRow) {
+  const fields = signedContent(row)?.fields
+  if (fields?.startsAt)
+    return {
+      startsAt: new Date(fields.startsAt).toISOString(),
+      doses: fields.doses,
+      intervalHours: fields.intervalHours,
+    }
+  return row.starts_at && row.doses !== null
+    ? { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours }
+    : null
+}
+
 /** The doses that the signed version in force plans; none for a draft. */
 export const plannedOf = oncePerRow((row): PlannedDose[] => {
-  if (!row.starts_at || row.doses === null) return []
-  return plannedDoses(
-    { startsAt: row.starts_at.toISOString(), doses: row.doses, intervalHours: row.interval_hours },
-    signedZone(row),
-  )
+  const course = courseOf(row)
+  return course ? plannedDoses(course, signedZone(row)) : []
 })
 
 function standingOfRow(row: OrderReadRow): OrderStanding {
@@ -62,9 +79,6 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
   }
 }
 
-/** What the signature says, read for showing; columns beside the text are never shown in its place. */
-export const signedContent = (row: OrderReadRow): SignedOrder | null => signedText(row)?.content ?? null
-
 export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
   const standing = standingOfRow(row)
   const phase = orderPhase(standing, now)
@@ -76,21 +90,19 @@ export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
     id: row.id,
     number: row.number,
     phase,
-    enclosureCode: row.enclosure_code,
-    enclosureName: row.enclosure_name,
-    agent: row.agent as OrderRow['agent'],
+    enclosureCode: content?.enclosure.code ?? row.enclosure_code,
+    enclosureName: content?.enclosure.name ?? row.enclosure_name,
+    agent: (content?.product.agent ?? row.agent) as OrderRow['agent'],
     problem: content?.fields.problem ?? draft?.problem ?? '',
-    amountText:
-      row.amount_entered_value === null
-        ? null
-        : formatDose(row.amount_entered_value, row.amount_entered_unit as UnitCode).text,
+    amountText: content?.amount.text ?? null,
     targetText: content?.targetText ?? null,
-    startsAt: row.starts_at?.toISOString() ?? draft?.startsAt ?? null,
-    signedBy: row.signed_by_name,
-    signedAt: row.signed_at?.toISOString() ?? null,
-    versionNo: row.version_no,
+    startsAt: courseOf(row)?.startsAt ?? draft?.startsAt ?? null,
+    signedBy: signedText(row)?.signedBy?.printedName ?? row.signed_by_name,
+    signedAt: signedText(row)?.signedBy?.signedAt ?? row.signed_at?.toISOString() ?? null,
+    versionNo: content?.versionNo ?? row.version_no,
+    record: recordOf(row),
     dosesGiven: row.given,
-    doses: row.doses,
+    doses: courseOf(row)?.doses ?? null,
     nextDueAt: isOpen && next ? next.dueAt : null,
   }
 }

@@ -12,8 +12,10 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
 import { openOrders } from './order-work.ts'
-import { plannedOf, presentOrderRow } from './orders.present.ts'
+import { differingCopies } from './compare-copies.ts'
+import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
+import type { VersionReadRow } from './orders.reads.ts'
 
 export interface OrderQueriesParts {
   dataSource: Db
@@ -55,6 +57,14 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     return row
   }
 
+  /** A signed version checked now: its text against the signature, and the columns beside it against the text. */
+  async function readVersion(order: { id: string; number: string }, version: VersionReadRow) {
+    const { content, block, text } = await parts.signing.readSealed(version.signed_text_id)
+    const differ = differingCopies({ ...version.copies, order }, readText(text))
+    const state = block.state === 'intact' && differ.length > 0 ? 'broken' : block.state
+    return { content: content as unknown as SignedOrder | null, block: { ...block, state } }
+  }
+
   return {
     /** Every order that matches, sorted. */
     async find(query: Omit<QueryOf<typeof listOrders>, 'cursor' | 'limit'>): Promise<OrderRow[]> {
@@ -90,7 +100,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const sealed = await Promise.all(
         versions.map(async (version) => ({
           versionNo: version.version_no,
-          ...(await parts.signing.readSealed(version.signed_text_id)),
+          ...(await readVersion(row, version)),
         })),
       )
       return {
@@ -142,13 +152,13 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const versions = await readVersions(parts.dataSource, row.id)
       const wanted = versions.find((version) => versionNo === undefined || version.version_no === versionNo)
       if (!wanted) throw new Problem('not-found', { detail: 'This order has no such signed version.' })
-      const { content, block } = await parts.signing.readSealed(wanted.signed_text_id)
+      const { content, block } = await readVersion(row, wanted)
       return {
         row: presentOrderRow(row, parts.now().toISOString()),
         versionId: wanted.id,
         versionNo: wanted.version_no,
         superseded: wanted !== versions[0],
-        content: content as unknown as SignedOrder | null,
+        content,
         block,
       }
     },

@@ -1,6 +1,12 @@
 import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
 
+/** The columns of a signed version, and whom it names. */
+export interface Copies {
+  version: Record<string, unknown>
+  animalIds: string[]
+}
+
 export interface OrderReadRow {
   id: string
   number: string
@@ -29,7 +35,13 @@ export interface OrderReadRow {
   ended: boolean
   done_keys: string[]
   given: number
+  /** The signed version in force as its columns say it; null while none is signed. */
+  copies: Copies | null
 }
+
+/** Of the version that a query calls v. */
+const copiesColumn = `json_build_object('version', to_jsonb(v.*),
+    'animalIds', coalesce((SELECT json_agg(a.animal_id) FROM order_version_animals a WHERE a.order_version_id = v.id), '[]'))`
 
 const columns = `
   o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
@@ -42,7 +54,8 @@ const columns = `
   coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
              WHERE x.order_id = o.id), '{}') AS done_keys,
   (SELECT count(*)::int FROM doses d JOIN order_versions x ON x.id = d.order_version_id
-    WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given`
+    WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
+  CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies`
 
 const tables = `
   FROM orders o
@@ -79,12 +92,32 @@ export interface VersionReadRow {
   id: string
   version_no: number
   signed_text_id: string
+  copies: Copies
 }
 
 export function readVersions(db: Db, orderId: string): Promise<VersionReadRow[]> {
   return db.query(
-    `SELECT v.id, v.version_no, v.signed_text_id FROM order_versions v WHERE v.order_id = $1 ORDER BY v.version_no DESC`,
+    `SELECT v.id, v.version_no, v.signed_text_id, ${copiesColumn} AS copies FROM order_versions v WHERE v.order_id = $1 ORDER BY v.version_no DESC`,
     [orderId],
+  )
+}
+
+export interface StoredVersionRow {
+  id: string
+  number: string
+  text: string
+  hash: string
+  signature: string
+  key_id: string
+  copies: Copies
+}
+
+/** Every signed version of every order with its text and seal. */
+export function readStoredVersions(db: Db): Promise<StoredVersionRow[]> {
+  return db.query(
+    `SELECT o.id, o.number, t.text, t.hash, t.signature, t.key_id, ${copiesColumn} AS copies
+       FROM order_versions v JOIN orders o ON o.id = v.order_id JOIN signed_texts t ON t.id = v.signed_text_id
+      ORDER BY o.number, v.version_no`,
   )
 }
 

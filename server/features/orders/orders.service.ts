@@ -1,8 +1,5 @@
 import type { AnsweredCaution, BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
-import { convert } from '../../../shared/domain/units/convert.ts'
-import { unitOf } from '../../../shared/domain/units/unit-of.ts'
-import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
@@ -28,6 +25,7 @@ import type { SituationParts } from './order-situation.ts'
 import type { CourseReporter } from './report-course.ts'
 import * as repository from './orders.repository.ts'
 import { saidCautions } from './say-order.ts'
+import { targetMgPerL } from './target-mg-per-l.ts'
 
 export interface OrdersParts extends SituationParts {
   transactions: Transactions
@@ -319,15 +317,6 @@ export function createOrdersService(parts: OrdersParts) {
       })
     },
   }
-}
-
-/** The target as mg/L where it is a mass concentration; null for a volume of product per litre. */
-function targetMgPerL(fields: BathOrderFields): number | null {
-  if (!fields.target) return null
-  const unit = fields.target.unit as UnitCode
-  if (unitOf(unit).dimension !== 'massConcentration') return null
-  const converted = convert(Number(fields.target.value), unit, 'mg/L')
-  return converted.ok ? converted.value : null
 }
 
 export type OrdersService = ReturnType<typeof createOrdersService>

@@ -155,7 +155,7 @@ export function presentSealed(
     block: {
       printedName: by?.printedName ?? '',
       role: by?.role ?? '',
-      licence: by?.licence ?? { jurisdiction: '', number: '', validUntil: '1970-01-01' },
+      licence: by?.licence ?? null,
       meaning: by?.meaning ?? row.meaning,
       signedAt: by?.signedAt ?? row.signedAt.toISOString(),
       signedOn: by?.signedOn ?? row.signedAt.toISOString().slice(0, 10),

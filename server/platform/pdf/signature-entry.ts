@@ -15,8 +15,10 @@ export function signatureEntry(block: SignatureBlock): SignatureEntry {
   return {
     name: block.printedName,
     role: documentWords.signerRole,
-    licence: documentWords.licence({ number: licence.number, until: sayDate(licence.validUntil) }),
-    jurisdiction: licence.jurisdiction,
+    licence: licence
+      ? documentWords.licence({ number: licence.number, until: sayDate(licence.validUntil) })
+      : documentWords.licenceUnreadable,
+    ...(licence ? { jurisdiction: licence.jurisdiction } : {}),
     meaning: documentWords.signedAs({ meaning: block.meaning }),
     signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
     check: block.state === 'intact' ? 'intact' : 'broken',

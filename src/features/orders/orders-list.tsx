@@ -67,7 +67,19 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
         </>
       ),
     },
-    { id: 'phase', heading: words.phase, narrow: 'head', cell: (row) => <PhaseTag phase={row.phase} /> },
+    {
+      id: 'phase',
+      heading: words.phase,
+      narrow: 'head',
+      cell: (row) => (
+        <>
+          <PhaseTag phase={row.phase} />
+          {row.record === 'broken' ? (
+            <span className="text-magenta t-strong block">{words.recordBroken}</span>
+          ) : null}
+        </>
+      ),
+    },
     {
       id: 'enclosure',
       heading: words.enclosure,

@@ -1,6 +1,7 @@
 import { OctagonX } from 'lucide-react'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import type { SignatureBlock as Block } from '../../../shared/contracts/signing.contract.ts'
+import { documentWords } from '../../../shared/messages/documents.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { Icon } from '../../ui/icon.tsx'
@@ -33,11 +34,13 @@ export function OrderSignature({ signature }: { signature: Block }) {
         <>
           <b>{signature.printedName}</b>
           <span className="block">
-            {words.licence({
-              jurisdiction: licence.jurisdiction,
-              number: licence.number,
-              until: sayDate(licence.validUntil),
-            })}
+            {licence === null
+              ? documentWords.licenceUnreadable
+              : words.licence({
+                  jurisdiction: licence.jurisdiction,
+                  number: licence.number,
+                  until: sayDate(licence.validUntil),
+                })}
           </span>
         </>
       }
