@@ -37,6 +37,7 @@ export const problemStatus = {
   'file-type-not-allowed': 422,
   'broken-record': 409,
   'already-confirmed': 409,
+  'volume-differs': 409,
   'another-person-needed': 403,
   'licence-not-valid': 403,
   'kind-has-no-water': 409,

@@ -64,9 +64,15 @@ export const confirmVolume = contract({
   action: 'volume.confirm',
   summary: 'Confirm a volume determination that another person made',
   params: volumeParams,
-  body: z.strictObject({ note: Note }),
+  body: z.strictObject({
+    note: Note,
+    differenceSeen: z
+      .boolean()
+      .optional()
+      .describe('Measured again: the volume is right though far from what was confirmed before'),
+  }),
   reply: { 200: Volume },
-  problems: ['not-found', 'another-person-needed', 'already-confirmed', 'already-void'],
+  problems: ['not-found', 'another-person-needed', 'already-confirmed', 'already-void', 'volume-differs'],
   idempotent: 'by-key',
 })
 

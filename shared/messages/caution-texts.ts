@@ -108,6 +108,8 @@ export const cautionTitles = defineMessages({
   'volume-old': 'Volume was determined long ago',
   'volume-estimated': 'Volume is estimated',
   'volume-estimated-error-unknown': 'Volume is estimated without an error',
+  'volume-error-large': 'Volume is not known closely',
+  'volume-differs': 'Volume differs much from the one before',
   'lot-expired': 'Lot has expired',
   'lot-expiry-unknown': 'Expiry of the lot is not known',
   'lot-recalled': 'Lot was recalled',
@@ -272,6 +274,10 @@ export const cautionTexts = defineMessages({
     `The volume is estimated with an error of ${p.errorPercent} %, more than ${p.limitPercent} %. The dose is wrong by as much.`,
   'volume-estimated-error-unknown': (p) =>
     `The volume is estimated, and nobody said how far it may be off. More than ${p.limitPercent} % is too much.`,
+  'volume-error-large': (p) =>
+    `The volume has an error of ${p.errorPercent} %, more than ${p.limitPercent} %. The dose is wrong by as much.`,
+  'volume-differs': (p) =>
+    `The volume of ${p.determinedOn} is ${p.now}; before, ${p.before} was confirmed for the same water. A figure so far off is often a slip of the decimal point.`,
   'lot-expired': (p) => `The lot expired on ${p.expiresOn}.`,
   'lot-expiry-unknown': () => 'The lot has no expiry date on record.',
   'lot-recalled': () => 'The lot was recalled.',

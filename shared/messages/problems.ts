@@ -48,6 +48,7 @@ export const problemTitles = defineMessages({
   'outside-working-order': 'Something failed on our side',
   'unknown-route': 'There is nothing at this address',
   'already-confirmed': 'This was already confirmed',
+  'volume-differs': 'This volume is far from the one before',
   'another-person-needed': 'Another person has to do this',
   'licence-not-valid': 'No licence valid today for a jurisdiction this facility accepts',
   'kind-has-no-water': 'A land area has no water of its own',

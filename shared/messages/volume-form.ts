@@ -103,6 +103,7 @@ export const volumeWords = defineMessages({
   confirmQuestion: (p: { volume: string; code: string }) => `Confirm ${p.volume} for ${p.code}?`,
   confirmHint:
     'Check the measures against the tank and the working by hand. Your name stands beside the first.',
+  differenceSeen: 'I have measured it again, and the water has changed so much.',
   confirmOwn: 'You determined it; a colleague confirms it',
   confirmed: 'Confirmed',
   withdraw: 'Withdraw',

@@ -19,6 +19,8 @@ export const volumeRefusals = defineMessages({
   'displaces-too-much': (p) =>
     `What stands in the tank can displace at most ${p.said('most')} % of it. Check the figure and its unit.`,
   'error-outside-range': () => 'Type the error of the volume as a percentage from 0 to 100.',
+  'error-above-volume': () =>
+    'The errors of the parts together are more than the water itself: this is no volume to dose by. Measure the parts again, more closely.',
   'meter-runs-backwards': () =>
     'The meter reading after filling has to be larger than the one before. Check both, or swap them.',
   'salinity-did-not-rise': () =>

@@ -131,6 +131,8 @@ export const waterDetails = defineMessages({
   notInUseThen: 'This enclosure was not in use at that time. Check the time.',
   ownBodyMissing: 'The water of this enclosure itself has to be among the bodies.',
   errorNeeded: 'Type an error above zero for what was measured: no volume is known exactly.',
+  volumeDiffers: (p: { now: string; before: string }) =>
+    `This volume is ${p.now}; for the same water ${p.before} was confirmed before. Look for a slip of the decimal point or the unit. If the water has changed so much, say that you have measured it again, and confirm.`,
   confirmAnother:
     'You determined this volume. Ask a colleague who is a veterinarian or technician to confirm it.',
   onlyOwnProposal: 'Only a veterinarian or technician withdraws a volume that somebody else determined.',

@@ -10,6 +10,8 @@ export interface Refusal {
   at: (pointer: string) => string | undefined
   /** What is to be said above the form: refusals of fields it does not show, or of the whole. */
   general: (shownPointers: readonly string[]) => string | undefined
+  /** Whether the last attempt was refused for one of these reasons. */
+  was: (...codes: string[]) => boolean
   busy: boolean
 }
 
@@ -33,6 +35,7 @@ export function useRefusal(): Refusal {
         setBusy(false)
       }
     },
+    was: (...codes) => problem !== null && isProblem(problem, ...codes),
     at: (pointer) => problem?.errors.find((error) => error.pointer === pointer)?.detail,
     general: (shownPointers) => {
       if (!problem) return undefined

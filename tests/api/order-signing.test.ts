@@ -2,6 +2,7 @@ import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { verifyOrders } from '../../server/features/orders/index.ts'
 import { aTaxon, anAnimal } from '../builders/a-collection.ts'
+import { aTankAndSumpSheet, anEnclosure } from '../builders/a-water.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
   aBathWater,
@@ -242,5 +243,43 @@ describe('what may be signed: an order', () => {
     const shown = (await agent.get(url).expect(200)).body.versions[0]
     expect(shown).toMatchObject({ content: null, signature: { state: 'broken', licence: null } })
     expect((await agent.get(`${url}/doses/1`).expect(409)).body.code).toBe('broken-record')
+  })
+})
+
+describe('a volume far from the one before', () => {
+  it('is confirmed only by somebody who says that it was measured again, and errors above the water are refused', async () => {
+    const alone = await anEnclosure(api, 'QT-10')
+    const technician = await api.as('technician')
+    const [tankPart] = aTankAndSumpSheet.parts
+    const send = (sheet: object, happenedAt: string) => {
+      const id = api.nextId()
+      return technician.agent
+        .post('/api/enclosures/QT-10/volumes')
+        .send({ id, happenedAt, waterBodyIds: [alone.waterBodyId], sheet })
+        .then((reply) => ({ id, reply }))
+    }
+    const of = (depth: string) => ({
+      method: 'geometry' as const,
+      parts: [{ ...tankPart, shape: { ...tankPart?.shape, depth: { value: depth, unit: 'm' } } }],
+      pipes: [],
+    })
+    const vet = await api.as('veterinarian')
+    const confirm = (id: string, given: object = {}) =>
+      vet.agent.post(`/api/volumes/${id}/confirmation`).set('Idempotency-Key', newKey()).send(given)
+    const before = await send(of('0.68'), '2026-12-01T14:00:00Z')
+    expect((await confirm(before.id)).status).toBe(200)
+    // the depth typed a decimal place off
+    const later = await send(of('6.80'), '2026-12-01T15:00:00Z')
+    const refused = await confirm(later.id)
+    expect([refused.status, refused.body.code]).toEqual([409, 'volume-differs'])
+    expect(refused.body.detail).toContain('decimal point')
+    const seen = await confirm(later.id, { differenceSeen: true })
+    expect(seen.status).toBe(200)
+    // 2.40 m × 1.20 m × 0.68 m
+    const now = await api.composition.water.questions.connectedWaterAt(alone.id, api.clock.now())
+    expect(now?.volume).toMatchObject({ netVolumeLitres: 19_584, previousLitres: 1958.4 })
+    const displacement = { by: 'share', share: { value: '60', unit: 'percent' }, errorPercent: 100 }
+    const { reply } = await send({ ...of('0.68'), displacement }, '2026-12-01T15:30:00Z')
+    expect([reply.status, reply.body.errors?.[0]?.code]).toEqual([422, 'error-above-volume'])
   })
 })

@@ -208,6 +208,7 @@ function volumeFact(water: WaterFacts): CautionFacts['volume']['determination'] 
       errorPercent: volume.errorPercent,
       determinedOn: volume.measuredOn,
       holdsForValves: volume.holdsForThisValveState,
+      previousLitres: volume.previousLitres,
     },
     volume.measuredAt,
     'the volume determination',

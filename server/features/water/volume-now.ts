@@ -16,6 +16,8 @@ export interface VolumeAt {
   basis: 'connected-water' | 'isolation' | null
   isolationId: string | null
   refusal: Refusal<VolumeChoiceRefusal> | null
+  /** Confirmed for the same water before `row`, in litres. */
+  previousLitres: number | null
 }
 
 export const determinationOf = (row: VolumeReadRow, at: Date): VolumeDetermination => ({
@@ -60,6 +62,23 @@ export function standingIsolations(
 }
 
 /**
+ * What was confirmed for exactly the same water before a determination; null when nothing was.
+ *
+ * @param rows the newest first, without withdrawn ones
+ */
+export function confirmedBefore(row: VolumeReadRow, rows: readonly VolumeReadRow[]): number | null {
+  const bodies = row.water_body_ids.join()
+  const before = rows.find(
+    (one) =>
+      one.id !== row.id &&
+      one.confirmed_at !== null &&
+      one.happened_at <= row.happened_at &&
+      one.water_body_ids.join() === bodies,
+  )
+  return before?.net_volume_litres ?? null
+}
+
+/**
  * The volume that a dose into the water of one body is worked out from, at the instant of `water`.
  *
  * @param rows those that touch this water, without withdrawn ones
@@ -81,7 +100,8 @@ export function volumeAt(
   if (choice.ok) {
     const { determination, basis, isolationId } = choice.value
     const row = rows.find((one) => one.id === determination.determinationId) ?? null
-    return { row, usable: true, holds: true, basis, isolationId, refusal: null }
+    const previousLitres = row && confirmedBefore(row, rows)
+    return { row, usable: true, holds: true, basis, isolationId, refusal: null, previousLitres }
   }
   const named = choice.refusal.params?.['determinationId']
   const covering = rows.filter((one) => timeSeenAt(one, at) <= at && one.water_body_ids.includes(waterBodyId))
@@ -92,5 +112,6 @@ export function volumeAt(
     basis: isolation ? 'isolation' : null,
     isolationId: isolation?.id ?? null,
     refusal: choice.refusal,
+    previousLitres: null,
   }
 }

@@ -6,7 +6,9 @@ import { findConnectedWater } from '../../../shared/domain/connections/connected
 import type { ConnectedWater } from '../../../shared/domain/connections/connected-water.ts'
 import type { VolumeMethod } from '../../../shared/domain/connections/volume-determination.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { formatVolume } from '../../../shared/domain/quantities/format-volume.ts'
 import { computeVolume } from '../../../shared/domain/water/compute-volume.ts'
+import { differsMuch } from '../../../shared/domain/water/differs-much.ts'
 import type { VolumeSheet } from '../../../shared/domain/water/volume-sheet.ts'
 import { sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts'
 import { waterDetails } from '../../../shared/messages/water.ts'
@@ -19,6 +21,7 @@ import { readWaterMapAt } from './read-water-map.ts'
 import type { WaterMapRows } from './read-water-map.ts'
 import { recordedStamps } from './recorded-stamps.ts'
 import { findDetermination, insertDetermination, insertVolumeConfirmation } from './volumes.repository.ts'
+import { confirmedBefore } from './volume-now.ts'
 import { readIsolations, readVolumes } from './volumes.reads.ts'
 import type { VolumeReadRow } from './volumes.reads.ts'
 import { insertVoid } from './water.repository.ts'
@@ -190,6 +193,15 @@ export function createVolumesService(parts: WaterServiceParts) {
         if (!decide('volume.confirm', roles, { 'another-person': another }).allowed || personId === null)
           throw new Problem('another-person-needed', { detail: waterDetails.confirmAnother })
         if (volume.confirmed_at) throw new Problem('already-confirmed')
+        const rows = await readVolumes(tx.manager, { waterBodyIds: volume.water_body_ids, withVoided: false })
+        const before = confirmedBefore(volume, rows)
+        if (given.differenceSeen !== true && differsMuch(volume.net_volume_litres, before))
+          throw new Problem('volume-differs', {
+            detail: waterDetails.volumeDiffers({
+              now: formatVolume(volume.net_volume_litres).text,
+              before: formatVolume(before).text,
+            }),
+          })
         await insertVolumeConfirmation(tx, {
           id: parts.ids.next(),
           determinationId: id,
@@ -201,7 +213,11 @@ export function createVolumesService(parts: WaterServiceParts) {
         tx.audit({
           action: 'volume.confirm',
           subject: subject(volume, volume.codes),
-          after: { netVolumeLitres: volume.net_volume_litres, determinedBy: volume.recorded_by },
+          after: {
+            netVolumeLitres: volume.net_volume_litres,
+            determinedBy: volume.recorded_by,
+            confirmedBeforeLitres: before,
+          },
         })
       })
     },

@@ -26,6 +26,8 @@ export interface VolumeFact {
   id: string
   netVolumeLitres: number
   grossVolumeLitres: number | null
+  /** What was confirmed for the same water before it, in litres; null when nothing was */
+  previousLitres: number | null
   /** Relative error, percent of the net volume, one side */
   errorPercent: number | null
   method: VolumeMethod
@@ -111,6 +113,7 @@ function volumeFact(found: EnclosureWater): VolumeFact | null {
     id: row.id,
     netVolumeLitres: row.net_volume_litres,
     grossVolumeLitres: row.gross_volume_litres,
+    previousLitres: found.volume.previousLitres,
     errorPercent: row.error_percent,
     method: row.method,
     displacementSubtracted: row.displacement_subtracted,

@@ -123,6 +123,8 @@ export interface CautionParams {
   'volume-old': { determinedOn: string; limitMonths: number }
   'volume-estimated': { errorPercent: number; limitPercent: number }
   'volume-estimated-error-unknown': { limitPercent: number }
+  'volume-error-large': { errorPercent: number; limitPercent: number }
+  'volume-differs': { now: CautionQuantity; before: CautionQuantity; determinedOn: string }
   'lot-expired': { expiresOn: string }
   'lot-expiry-unknown': Record<never, never>
   'lot-recalled': Record<never, never>

@@ -56,6 +56,8 @@ export interface VolumeFact {
   determinedOn: FacilityDate
   /** Whether it holds for the valves as they stand. */
   holdsForValves: boolean
+  /** What was confirmed for the same water before it; null when this is the first. */
+  previousLitres: number | null
 }
 
 /** Doses of the same order line so far, for their spacing. */

@@ -27,7 +27,8 @@ const ownKeys = ['gross-volume', 'displaced', 'net-volume', 'volume-error', 'vol
  *
  * The error is combined as in combineErrors.
  *
- * @refuses as the shapes, with paths such as "parts.0.depth" · no-water-part · part-named-twice · error-outside-range · as displacedVolume
+ * @refuses as the shapes, with paths such as "parts.0.depth" · no-water-part · part-named-twice · error-outside-range ·
+ *          error-above-volume when the errors together are more than the net water · as displacedVolume
  *          · below-least, above-most when the whole is no volume of a system (field netVolume)
  * @source  mensuration · check values geom.*
  */
@@ -88,6 +89,7 @@ export function volumeByGeometry(
   )
 
   const combined = combineErrors(errors, netLitres)
+  if (!isErrorPercent(combined.errorPercent)) return refuse('error-above-volume', 'parts')
   working.push(...combined.lines)
   return ok({
     method: 'geometry',

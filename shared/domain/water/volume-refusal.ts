@@ -12,6 +12,7 @@ export type VolumeRefusal =
   | 'part-named-twice'
   | 'displaces-too-much'
   | 'error-outside-range'
+  | 'error-above-volume'
   | 'meter-runs-backwards'
   | 'salinity-did-not-rise'
   | 'changed-more-than-volume'

@@ -98,11 +98,14 @@ export const useDetermineVolume = (code: string) =>
   }))
 
 export const useConfirmVolume = () =>
-  useWaterMutation(volumes.confirmVolume, (given: { id: string; note: string | null; key: string }) => ({
-    params: { id: given.id },
-    body: { note: given.note },
-    key: given.key,
-  }))
+  useWaterMutation(
+    volumes.confirmVolume,
+    ({ id, key, ...body }: { id: string; key: string } & BodyOf<typeof volumes.confirmVolume>) => ({
+      params: { id },
+      body,
+      key,
+    }),
+  )
 
 export const useVoidVolume = () =>
   useWaterMutation(volumes.voidVolume, (given: { id: string; reason: string; key: string }) => ({

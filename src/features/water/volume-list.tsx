@@ -25,6 +25,7 @@ import { Quantity } from '../../ui/quantity.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { Tag } from '../../ui/tag.tsx'
 import { TextField } from '../../ui/text-field.tsx'
+import { Tick } from '../../ui/tick.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useConfirmVolume, useVoidVolume } from './mutations.ts'
 import { netVolumeText, volumeUnitOf } from './net-volume.tsx'
@@ -191,8 +192,14 @@ function ConfirmDialog({
   const refusal = useRefusal()
   const [key] = useState(newId)
   const [note, setNote] = useState('')
+  const [differenceSeen, setDifferenceSeen] = useState(false)
   const send = async () => {
-    const given = { id: volume.id, note: note.trim() || null, key }
+    const given = {
+      id: volume.id,
+      note: note.trim() || null,
+      key,
+      ...(differenceSeen ? { differenceSeen } : {}),
+    }
     if (await refusal.attempt(() => confirm.mutateAsync(given))) onBack()
   }
   return (
@@ -212,6 +219,13 @@ function ConfirmDialog({
       <div className="stack">
         <WrongSummary fields={[]} general={refusal.general([])} />
         <p className="t-2">{volumeWords.confirmHint}</p>
+        {refusal.was('volume-differs') || differenceSeen ? (
+          <Tick
+            label={volumeWords.differenceSeen}
+            checked={differenceSeen}
+            onChange={(event) => setDifferenceSeen(event.target.checked)}
+          />
+        ) : null}
         <TextField
           label={waterWords.note}
           optional

@@ -115,6 +115,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
         errorPercent: fc.option(figure),
         determinedOn: date,
         holdsForValves: fc.boolean(),
+        previousLitres: fc.option(figure),
       }),
     ),
   }),

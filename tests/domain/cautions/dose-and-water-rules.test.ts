@@ -233,11 +233,11 @@ describe('R31, R32, R34: readings, volume, lot', () => {
       errorPercent: 4,
       determinedOn: '2026-03-02',
       holdsForValves: true,
+      previousLitres: null,
       ...change,
     })
   it.each<[string, CautionFacts['volume']['determination'], string[]]>([
     ['sound', determined({}), []],
-    ['unknown', unknown(), ['volume-unknown']],
     ['gross', determined({ displacementSubtracted: false }), ['volume-gross']],
     ['a meter sees only water', determined({ displacementSubtracted: false, method: 'metered' }), []],
     ['12 months old', determined({ determinedOn: '2025-05-14' }), []],
@@ -250,10 +250,28 @@ describe('R31, R32, R34: readings, volume, lot', () => {
       ['volume-estimated-error-unknown'],
     ],
     ['other valves', determined({ holdsForValves: false }), ['volume-other-valves']],
+    ['measured, 10 %', determined({ method: 'metered', errorPercent: 10 }), []],
+    ['measured, 11 %', determined({ method: 'metered', errorPercent: 11 }), ['volume-error-large']],
+    ['twice the one before', determined({ previousLitres: 1110 }), []],
+    ['three times the one before', determined({ previousLitres: 740 }), ['volume-differs']],
   ])('R32: %s', (_, determination, codes) => {
     const of = (agent: AgentCode) => firedBy('R32', someFacts(agent, mg(2), { volume: { determination } }))
     expect(of('formalin')).toEqual(codes.map((code) => `stop ${code}`))
     expect(of('praziquantel')).toEqual(codes.map((code) => `warning ${code}`))
+  })
+  it('R32: stops where there is no volume, whatever the drug', () => {
+    const facts = someFacts('praziquantel', mg(2), { volume: { determination: unknown() } })
+    expect(firedBy('R32', facts)).toEqual(['stop volume-unknown'])
+  })
+  it.each<[string, object, string]>([
+    ['± 91 %', { errorPercent: 91 }, 'volume-error-large'],
+    ['estimated, ± 51 %', { method: 'estimated', errorPercent: 51 }, 'volume-estimated'],
+    ['ten times the one before', { previousLitres: 222 }, 'volume-differs'],
+    ['a tenth of the one before', { previousLitres: 22_200 }, 'volume-differs'],
+  ])('R32: %s stops whatever the drug', (_, change, code) => {
+    const facts = someFacts('praziquantel', mg(2), { volume: { determination: determined(change) } })
+    for (const stage of ['design', 'start'] as const)
+      expect(firedBy('R32', facts, stage)).toEqual([`stop ${code}`])
   })
   it.each<[string, Partial<CautionFacts['lot']>, string[]]>([
     ['last day', { expiresOn: known('2026-05-14') }, []],
@@ -289,6 +307,7 @@ describe('R39, R41, R42', () => {
       errorPercent: 2,
       determinedOn: '2026-03-02',
       holdsForValves: true,
+      previousLitres: null,
     })
     expect(due('praziquantel', { ...first, volume: { determination: large } })).toEqual([
       'note second-calculation',

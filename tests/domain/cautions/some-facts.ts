@@ -105,6 +105,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
         errorPercent: 2,
         determinedOn: '2026-03-02',
         holdsForValves: true,
+        previousLitres: null,
       }),
     },
     lifeSupport: {

@@ -3,6 +3,8 @@ import { facilityDateOf } from '../../time/facility-date.ts'
 import { type CautionFinding, type CautionLevel, defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
+import { differsMuch } from '../../water/differs-much.ts'
+import { readingOf } from '../caution-param.ts'
 
 const narrowMargin: readonly AgentCode[] = ['formalin', 'copper-sulfate', 'tricaine']
 
@@ -15,6 +17,15 @@ export const volume = defineRule({
   parameters: {
     maxAgeMonths: { default: 12, unit: 'count', source: 'project-default', mark: 'P', tighter: 'lower' },
     maxErrorPercent: { default: 10, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
+    stopErrorPercent: {
+      default: 50,
+      unit: 'percent',
+      source: 'project-default',
+      mark: 'P',
+      tighter: 'lower',
+    },
+    differsStopFactor: { default: 5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
+    differsFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['volume.determination'],
   sources: [
@@ -22,14 +33,15 @@ export const volume = defineRule({
     { source: 'project-default', mark: 'P' },
   ],
   concerns: () => true,
-  judge(facts, { maxAgeMonths, maxErrorPercent }) {
+  judge(facts, { maxAgeMonths, maxErrorPercent, stopErrorPercent, differsFactor, differsStopFactor }) {
     const level: CautionLevel = narrowMargin.includes(facts.agent) ? 'stop' : 'warning'
     const determined = valueOf(facts.volume.determination)
     if (!determined)
       return [
         {
           code: 'volume-unknown',
-          level,
+          // without a volume there is no amount, whatever the drug
+          level: 'stop',
           params: {},
           resolvedBy: ['determine-volume'],
           unknown: ['volume.determination'],
@@ -38,6 +50,7 @@ export const volume = defineRule({
     const found: CautionFinding[] = []
     const base = { level, resolvedBy: ['determine-volume'] } as const
     const { determinedOn, displacementSubtracted, errorPercent, holdsForValves, method } = determined
+    const { netVolumeLitres, previousLitres } = determined
     if (!holdsForValves) found.push({ ...base, code: 'volume-other-valves', params: { determinedOn } })
     // A meter and a dilution see only the water, so nothing has to be taken off.
     if (!displacementSubtracted && (method === 'geometry' || method === 'estimated'))
@@ -50,11 +63,25 @@ export const volume = defineRule({
         code: 'volume-estimated-error-unknown',
         params: { limitPercent: maxErrorPercent },
       })
-    if (method === 'estimated' && errorPercent !== null && exceeds(errorPercent, maxErrorPercent))
+    if (errorPercent !== null && exceeds(errorPercent, maxErrorPercent))
       found.push({
         ...base,
-        code: 'volume-estimated',
-        params: { errorPercent, limitPercent: maxErrorPercent },
+        // a volume known this badly is none for any drug
+        level: exceeds(errorPercent, stopErrorPercent) ? 'stop' : level,
+        code: method === 'estimated' ? 'volume-estimated' : 'volume-error-large',
+        params: { errorPercent: Math.round(errorPercent * 10) / 10, limitPercent: maxErrorPercent },
+      })
+    if (differsMuch(netVolumeLitres, previousLitres, differsFactor))
+      found.push({
+        // most likely a slip of the decimal point
+        level: differsMuch(netVolumeLitres, previousLitres, differsStopFactor) ? 'stop' : level,
+        code: 'volume-differs',
+        params: {
+          now: readingOf(netVolumeLitres, 'L'),
+          before: readingOf(previousLitres, 'L'),
+          determinedOn,
+        },
+        resolvedBy: ['determine-volume'],
       })
     return found
   },
