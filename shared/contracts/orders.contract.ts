@@ -269,6 +269,11 @@ export const previewOrder = contract({
   path: '/order-previews',
   action: 'order.draft',
   summary: 'Work out an order and judge it, without keeping anything',
+  query: z.strictObject({
+    order: OrderNumber.optional().describe(
+      'The order that is being written or amended, once it has a number',
+    ),
+  }),
   body: BathOrderFields,
   reply: { 200: OrderPreview },
   problems: ['not-found', 'dose-line-not-usable'],

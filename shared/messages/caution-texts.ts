@@ -100,6 +100,14 @@ export const cautionTitles = defineMessages({
   'dose-very-early': 'Dose is much too early',
   'dose-late': 'Dose is late',
   'doses-past-plan': 'All planned doses are given',
+  'same-agent-together': 'The same drug is ordered for this water already',
+  'agents-not-together': 'Drugs that do not go together',
+  'agent-in-water': 'Another drug is in this water',
+  'agent-same-day': 'Another drug within a day',
+  'start-past': 'First dose lies in the past',
+  'start-far': 'First dose lies far ahead',
+  'doses-carried': 'Doses given before count',
+  'plan-counts-given': 'The plan begins after doses were given, and counts them',
   'test-missing': 'Water test is missing',
   'test-old': 'Water test is too old',
   'volume-unknown': 'Volume is not determined',
@@ -261,6 +269,20 @@ export const cautionTexts = defineMessages({
   'dose-late': (p) =>
     `${hours(p.hours)} after the last dose. The window closed after ${hours(p.latestHours)}.`,
   'doses-past-plan': (p) => `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} are given.`,
+  'same-agent-together': (p) =>
+    `Order ${p.orderNumber} gives the same drug into this connected water at the same time. Together the animals get both doses.`,
+  'agents-not-together': (p) =>
+    `Order ${p.orderNumber} gives ${p.agent} into this connected water at the same time or within a day. The two are not combined.`,
+  'agent-in-water': (p) =>
+    `Order ${p.orderNumber} gives ${p.agent} into this connected water at the same time, or nobody recorded that it is out.`,
+  'agent-same-day': (p) => `Order ${p.orderNumber} gives ${p.agent} into this connected water within a day.`,
+  'start-past': (p) => `The first dose is planned for ${p.startsAt}, and its window has closed.`,
+  'start-far': (p) =>
+    `The first dose is planned for ${p.startsAt}, more than ${days(p.limitDays)} ahead. Animals and water will not be as they are judged now.`,
+  'doses-carried': (p) =>
+    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given under an earlier version, the last at ${p.lastAt}. They count: the next is dose ${p.given + 1}.`,
+  'plan-counts-given': (p) =>
+    `The plan begins at ${p.startsAt}, and ${counted(p.given, 'dose was', 'doses were')} given before, the last at ${p.lastAt}. They count as the first of the ${counted(p.planned, 'planned dose', 'planned doses')}: the next is dose ${p.given + 1}.`,
   'test-missing': (p) => `No reading of ${p.reading}. It has to be at most ${minutes(p.maxAgeMinutes)} old.`,
   'test-old': (p) =>
     `The reading of ${p.reading} of ${p.readAt} is ${minutes(p.ageMinutes)} old. It counts for ${minutes(p.maxAgeMinutes)}.`,

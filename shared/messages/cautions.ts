@@ -45,6 +45,7 @@ export const cautionRuleWords = defineMessages({
   R26: 'The figure lies within the range of its dose line, or of the highest line where the order names none',
   R27: 'The figure says of what it is',
   R28: 'The dose lies within its window and the planned number',
+  R29: 'Other drugs in this water, and the same drug from another order',
   R31: 'Water tests are fresh',
   R32: 'The volume is determined, recent, close enough, like the one before, and holds for the valves as they stand',
   R34: 'The lot may be used',
@@ -52,6 +53,7 @@ export const cautionRuleWords = defineMessages({
   R41: 'The animals can bear a treatment',
   R42: 'First use of this drug in a taxon here',
   R47: 'The figure is not beyond every dose line of the drug',
+  R48: 'The plan lies in the days to come, and counts what was given before',
 } satisfies Record<CautionRuleId, string>)
 
 export const readingWords = defineMessages({
@@ -125,6 +127,7 @@ export const resolveWords = defineMessages({
   'state-basis': 'Say of what the figure is: product, salt, base, active part, free or total.',
   'wait-for-window': 'Wait until the window of the dose opens.',
   'amend-order': 'A veterinarian amends the order.',
+  'check-start': 'Check the date and time of the first dose.',
   'determine-volume': 'Determine the volume of the water as it is connected now.',
   'calculate-again-by-another': 'Another person works out the amount, without seeing the first result.',
   'let-animals-rest': 'Let the animals recover first.',
@@ -186,5 +189,7 @@ export const ruleParameterWords = defineMessages({
   amountMillilitres: 'Volume of product above which a second person works it out',
   amountShare: 'Share of the plan above which it is worked out again',
   unwellPercent: 'Share of unwell animals',
+  sameDayHours: 'Hours within which another drug is said',
+  aheadDays: 'Days ahead from which a start is asked about',
   beyondFactor: 'Times the highest dose line that nobody can sign',
 } satisfies Record<RuleParameterKey, string>)

@@ -3,6 +3,8 @@ import { defineMessages } from './define-messages.ts'
 /** Words about giving and recording doses. */
 export const doseWords = defineMessages({
   unreadable: 'The signed text of this order cannot be read any more. Do not dose; tell the administrator.',
+  earlierOpen: (p: { key: string }) =>
+    `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
   notIntact: 'The signed order no longer matches its signature. Do not dose; tell a veterinarian.',
   held: 'The order is held. A veterinarian lifts the hold.',
   ended: 'The order has ended.',

@@ -31,6 +31,8 @@ export type OrderField = keyof typeof orderMissing
 
 /** Why an order is refused, and what to do. */
 export const orderProblemWords = defineMessages({
+  startYears: (p: { years: number }) =>
+    `The first dose lies more than ${counted(p.years, 'year', 'years')} from today. Check the year, and type the date again.`,
   lineNotInForce:
     'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
   lineOfOther: (p: { line: string; product: string }) =>

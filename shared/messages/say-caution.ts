@@ -19,6 +19,7 @@ import {
   secondCalculationWords,
 } from './cautions.ts'
 import { counted } from './define-messages.ts'
+import { agentNames } from './formulary.ts'
 import { sayDate, sayInstant } from './say-date.ts'
 
 /** A caution in words, as on screen and in print. */
@@ -65,6 +66,7 @@ function sayText(name: string, value: string, zone: string): string {
   if (name.endsWith('At')) return sayInstant(value, zone)
   if (name === 'reading') return readingWords[value as keyof typeof readingWords]
   if (name === 'row') return formalinRowWords[value as keyof typeof formalinRowWords]
+  if (name === 'agent') return agentNames[value as keyof typeof agentNames]
   if (name === 'because') return secondCalculationWords[value as keyof typeof secondCalculationWords]
   return value
 }

@@ -68,6 +68,10 @@ export function obstacles(situation: DoseSituation, calculations: Calculations):
   const gone = goneOf(situation)
   if (gone.all) why.push(doseWords.allGone({ animals: gone.names.join('; ') }))
   if (situation.unexplained > 0) why.push(doseWords.unexplained)
+  const earlier = situation.plan
+    .slice(0, situation.plan.indexOf(situation.planned))
+    .find(({ key }) => !records.some((record) => record.dose_key === key))
+  if (earlier) why.push(doseWords.earlierOpen({ key: earlier.key }))
   if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
   if (drift && !drift.within)
     why.push(

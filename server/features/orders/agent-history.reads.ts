@@ -8,6 +8,13 @@ export interface AgentUseRow {
   discontinued_at: Date | null
   last_given_at: Date | null
   timed: boolean
+  doses: number
+  interval_hours: number | null
+  contact_minutes: number | null
+  /** Planned doses with a record of any kind. */
+  done_keys: string[]
+  /** When doses went in, and when the bath was over or the agent out of the water. */
+  given: { at: string; ended: string | null }[]
 }
 
 /**
@@ -25,6 +32,14 @@ export function readAgentUses(
             CASE WHEN v.contact_minutes IS NULL THEN NULL
                  ELSE v.starts_at + (coalesce(v.interval_hours, 0) * (v.doses - 1)) * interval '1 hour'
                       + v.contact_minutes * interval '1 minute' END AS ends_at,
+            v.doses, v.interval_hours, v.contact_minutes,
+            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+                       WHERE x.order_id = o.id AND d.happened_at <= $2), '{}') AS done_keys,
+            coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
+                               (SELECT min(s.happened_at) FROM bath_stops s
+                                 WHERE s.dose_id = d.id AND s.happened_at <= $2)))
+                        FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+                       WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2), '[]') AS given,
             (SELECT min(e.happened_at) FROM order_events e
               WHERE e.order_id = o.id AND e.kind = 'discontinued' AND e.happened_at <= $2) AS discontinued_at,
             (SELECT max(d.happened_at) FROM doses d JOIN order_versions w ON w.id = d.order_version_id
@@ -63,4 +78,19 @@ export async function readExperiencedTaxa(db: Db, agent: string, taxonIds: reado
     [agent, [...taxonIds], at],
   )
   return new Set(rows.map((row) => row.taxon_id))
+}
+
+/** What the versions of an order gave so far: planned doses that went in, and when the last did. Nothing of a new order. */
+export async function readGivenBefore(
+  db: Db,
+  orderId: string | null,
+): Promise<{ doses: number; lastAt: string | null }> {
+  if (orderId === null) return { doses: 0, lastAt: null }
+  const [row]: { doses: number; last_at: Date | null }[] = await db.query(
+    `SELECT count(DISTINCT d.dose_key)::int AS doses, max(d.happened_at) AS last_at
+       FROM doses d JOIN order_versions v ON v.id = d.order_version_id
+      WHERE v.order_id = $1 AND d.kind IN ('given', 'recorded')`,
+    [orderId],
+  )
+  return { doses: row?.doses ?? 0, lastAt: row?.last_at?.toISOString() ?? null }
 }

@@ -62,6 +62,7 @@ export function createOrders(parts: OrdersOutside) {
     zone: () => facility.zone(),
   })
   const situation = {
+    dataSource,
     facts,
     product: (id: string) => formulary.queries.product(id),
     doseLine: (id: string) => formulary.queries.doseLine(id),

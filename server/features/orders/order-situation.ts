@@ -14,9 +14,11 @@ import { orderMissing, orderProblemWords } from '../../../shared/messages/orders
 import type { OrderField } from '../../../shared/messages/orders.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import { readGivenBefore } from './agent-history.reads.ts'
 import type { BathFactsReader, BathSituation } from './bath-facts.ts'
 
 export interface SituationParts {
+  dataSource: Db
   facts: BathFactsReader
   product(id: string): Promise<Product>
   doseLine(id: string): Promise<DoseLine>
@@ -35,7 +37,7 @@ export interface OrderSituation {
 const nothingTyped: Quantity = { value: '', unit: 'mg/L' }
 
 /** The draft in the terms of the engines. What nobody filled in stays missing and is refused there. */
-export function draftOf(fields: BathOrderFields): BathOrderDraft {
+export function draftOf(fields: BathOrderFields, given: BathOrderDraft['given']): BathOrderDraft {
   return {
     target: { concentration: (fields.target as Quantity | null) ?? nothingTyped, basis: fields.basis },
     timing: fields.timing,
@@ -45,6 +47,7 @@ export function draftOf(fields: BathOrderFields): BathOrderDraft {
     startsAt: fields.startsAt,
     setting: fields.setting,
     division: (fields.division as Quantity | null) ?? { value: '', unit: 'g' },
+    given,
     stated: fields.stated,
   }
 }
@@ -86,7 +89,7 @@ const rangeOf = ({ low, high, unit, basis }: DoseLine) => ({
  * Refuses an order that names a dose line of another drug, or one that is not in force. A signed order keeps the line it
  * was signed with, whatever becomes of it.
  */
-export async function refuseDoseLine(parts: SituationParts, fields: BathOrderFields): Promise<void> {
+async function refuseDoseLine(parts: SituationParts, fields: BathOrderFields): Promise<void> {
   const { productId, doseLineId } = fields
   if (productId === null || doseLineId === null) return
   const { agent } = await parts.product(productId)
@@ -107,6 +110,26 @@ export async function refuseDoseLine(parts: SituationParts, fields: BathOrderFie
 export const noWaterProblem = () =>
   new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
 
+const mostYearsOff = 2
+const yearMs = 366 * 24 * 3_600_000
+
+/** Refuses a first dose whose year cannot be meant: nothing planned or done is that far from today. */
+function refuseStart({ startsAt }: BathOrderFields, now: Date): void {
+  if (startsAt === null) return
+  if (Math.abs(Date.parse(startsAt) - now.getTime()) <= mostYearsOff * yearMs) return
+  const detail = orderProblemWords.startYears({ years: mostYearsOff })
+  throw new Problem('bad-input', {
+    detail,
+    errors: [{ pointer: '/fields/startsAt', detail, code: 'start-beyond-reason' }],
+  })
+}
+
+/** Refuses what an order cannot mean, whatever else is still missing. */
+export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields, now: Date): Promise<void> {
+  refuseStart(fields, now)
+  await refuseDoseLine(parts, fields)
+}
+
 /** Reads the facts of an instant and judges the order by them: the one way, while writing, at signing and at the dose. */
 export async function readSituation(
   parts: SituationParts,
@@ -118,10 +141,11 @@ export async function readSituation(
   const line = fields.doseLineId === null ? null : await parts.doseLine(fields.doseLineId)
   const situation = await parts.facts.read(fields.enclosureId, product?.agent ?? null, at, options)
   if (!situation) throw noWaterProblem()
+  const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
   const judgement = product
     ? judgeBathOrder(
         situation.base,
-        draftOf(fields),
+        draftOf(fields, given),
         chosenOf(product, line, await parts.doseLinesOf(product.agent), fields.lotId),
         {},
         options.stage,

@@ -137,6 +137,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       }
     },
 
+    idOf: async (number: string): Promise<string> => (await rowOf(number)).id,
+
     /** Signed orders that are not ended, with their plan: what worklists ask. */
     async open() {
       const now = parts.now().toISOString()

@@ -4,7 +4,7 @@ import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { ordersCsvColumns } from './orders-csv.ts'
-import { readSituation, refuseDoseLine } from './order-situation.ts'
+import { readSituation, refuseUnfit } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
 import type { OrderQueries } from './orders.queries.ts'
 import type { OrdersService } from './orders.service.ts'
@@ -26,9 +26,11 @@ export function orderRoutes({ service, queries, situation, now, print }: OrderRo
       csvReply('orders.csv', ordersCsvColumns, await queries.find(query)),
     ),
     route(contracts.getOrder, ({ params, context }) => queries.order(params.number, context.actor)),
-    route(contracts.previewOrder, async ({ body }) => {
-      await refuseDoseLine(situation, body)
-      return presentPreview(body, await readSituation(situation, body, now()))
+    route(contracts.previewOrder, async ({ body, query }) => {
+      await refuseUnfit(situation, body, now())
+      // an order that is amended is not another order beside itself
+      const exceptOrderId = query.order === undefined ? null : await queries.idOf(query.order)
+      return presentPreview(body, await readSituation(situation, body, now(), { exceptOrderId }))
     }),
     route(contracts.draftOrder, async ({ body, context }) => {
       const { number } = await service.draftOrder(context, body.id, body.fields)

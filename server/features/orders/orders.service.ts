@@ -19,7 +19,7 @@ import {
   missingProblem,
   noWaterProblem,
   readSituation,
-  refuseDoseLine,
+  refuseUnfit,
 } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
 import type { CourseReporter } from './report-course.ts'
@@ -108,7 +108,7 @@ export function createOrdersService(parts: OrdersParts) {
       fields: BathOrderFields,
     ): Promise<{ number: string }> {
       if (!(await parts.hasWater(fields.enclosureId))) throw noWaterProblem()
-      await refuseDoseLine(parts, fields)
+      await refuseUnfit(parts, fields, parts.clock.now())
       return parts.transactions.inTransaction(context, async (tx) => {
         const earlier = await repository.findOrderById(tx, id)
         if (earlier) {
@@ -141,7 +141,7 @@ export function createOrdersService(parts: OrdersParts) {
       expectedVersion: number,
       fields: BathOrderFields,
     ) {
-      await refuseDoseLine(parts, fields)
+      await refuseUnfit(parts, fields, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await refuseEnded(tx, order)
@@ -193,7 +193,7 @@ export function createOrdersService(parts: OrdersParts) {
         const fields = JSON.parse(order.draftText) as BathOrderFields
         const missing = missingFields(fields)
         if (missing.length > 0) throw missingProblem(missing)
-        await refuseDoseLine(parts, fields)
+        await refuseUnfit(parts, fields, parts.clock.now())
         const found = await readSituation(parts, fields, tx.at, { db: tx.manager, exceptOrderId: order.id })
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found

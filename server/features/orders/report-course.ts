@@ -5,19 +5,9 @@ import type { Zone } from '../../../shared/domain/time/instant.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { TreatmentsService } from '../quarantine/index.ts'
+import { courseEndedAt } from './course-ended.ts'
 import { readCourse } from './course.reads.ts'
 import type { CourseReadRow } from './course.reads.ts'
-
-/** Whether nothing more is to be given, and everything given is over. */
-function courseEndedAt({ given, discontinued, done_keys, doses }: CourseReadRow): Date | null {
-  const allDone = Array.from({ length: doses }, (_, i) => String(i + 1)).every((key) =>
-    done_keys.includes(key),
-  )
-  if (given.length === 0 || !(allDone || discontinued)) return null
-  const ends = given.map(({ ended }) => ended)
-  if (ends.includes(null)) return null
-  return new Date(Math.max(...ends.map((end) => Date.parse(end ?? ''))))
-}
 
 function plannedEndOn(course: CourseReadRow, zone: Zone) {
   const last = plannedDoses(

@@ -1,3 +1,4 @@
+import type { AgentCode } from '../formulary/agent.ts'
 import type { ReadingName } from './reading-name.ts'
 import type { CautionQuantity, NamedAnimal } from './caution-param.ts'
 
@@ -115,6 +116,14 @@ export interface CautionParams {
   'dose-very-early': { hours: number; intervalHours: number }
   'dose-late': { hours: number; latestHours: number }
   'doses-past-plan': { given: number; planned: number }
+  'same-agent-together': { orderNumber: string }
+  'agents-not-together': { orderNumber: string; agent: AgentCode }
+  'agent-in-water': { orderNumber: string; agent: AgentCode }
+  'agent-same-day': { orderNumber: string; agent: AgentCode }
+  'start-past': { startsAt: string }
+  'start-far': { startsAt: string; limitDays: number }
+  'doses-carried': { given: number; planned: number; lastAt: string; startsAt: string }
+  'plan-counts-given': { given: number; planned: number; lastAt: string; startsAt: string }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -194,6 +203,7 @@ export type ResolveCode =
   | 'state-basis'
   | 'wait-for-window'
   | 'amend-order'
+  | 'check-start'
   | 'determine-volume'
   | 'calculate-again-by-another'
   | 'let-animals-rest'

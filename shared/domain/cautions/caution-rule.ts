@@ -35,6 +35,7 @@ export const cautionRuleIds = [
   'R26',
   'R27',
   'R28',
+  'R29',
   'R31',
   'R32',
   'R34',
@@ -42,6 +43,7 @@ export const cautionRuleIds = [
   'R41',
   'R42',
   'R47',
+  'R48',
 ] as const
 export type CautionRuleId = (typeof cautionRuleIds)[number]
 
@@ -108,6 +110,8 @@ export const ruleParameterKeys = [
   'amountShare',
   'unwellPercent',
   'beyondFactor',
+  'sameDayHours',
+  'aheadDays',
 ] as const
 export type RuleParameterKey = (typeof ruleParameterKeys)[number]
 

@@ -22,6 +22,7 @@ import { permanganate } from './rules/r24-permanganate.ts'
 import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
+import { otherAgents } from './rules/r29-other-agents.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
 import { lot } from './rules/r34-lot.ts'
@@ -29,6 +30,7 @@ import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
 import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
+import { plannedTime } from './rules/r48-planned-time.ts'
 
 /** Every rule, in the order of its number, which is also the order of equal cautions on screen. */
 export const cautionRules: readonly CautionRule[] = [
@@ -55,6 +57,7 @@ export const cautionRules: readonly CautionRule[] = [
   defaultRange,
   basis,
   doseSpacing,
+  otherAgents,
   staleReadings,
   volume,
   lot,
@@ -62,4 +65,5 @@ export const cautionRules: readonly CautionRule[] = [
   weakAnimals,
   firstUse,
   beyondEveryLine,
+  plannedTime,
 ]

@@ -19,6 +19,8 @@ export interface BathOrderDraft {
   setting: 'tank' | 'raceway' | 'pond' | null
   /** The step of the balance or measure. */
   division: Quantity
+  /** What earlier versions of the order gave already. */
+  given: { doses: number; lastAt: Instant | null }
   /** What only a person knows; empty until somebody says so. */
   stated: StatedFacts
 }

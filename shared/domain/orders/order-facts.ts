@@ -118,17 +118,17 @@ export function orderFacts(
       amountMillilitres: amountFact(dose, 'mL'),
       amountShareOfPlan: known(1, null, 'the order'),
       isTopUpInsideLimits: known(false, null, 'the order'),
-      dosesGiven: known(0, null, 'the order'),
+      dosesGiven: known(draft.given.doses, null, 'the order'),
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
       spacing:
-        draft.intervalHours === null
+        draft.intervalHours === null && draft.given.doses === 0
           ? notApplicable()
           : known(
               {
-                intervalHours: draft.intervalHours,
-                lastGivenAt: null,
-                givenDoses: 0,
+                intervalHours: draft.intervalHours ?? 0,
+                lastGivenAt: draft.given.lastAt,
+                givenDoses: draft.given.doses,
                 plannedDoses: draft.doses,
                 readingDriven: false,
               },

@@ -67,7 +67,9 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
       : writing.kept.text !== text || faults.length > 0
   const { blocker, letGo } = useLeaveGuard(unsaved)
   const settled = useSettled(text, pauseMs)
-  const preview = useQuery(previewQuery(settled === 'null' ? null : (JSON.parse(settled) as typeof fields)))
+  const preview = useQuery(
+    previewQuery(settled === 'null' ? null : (JSON.parse(settled) as typeof fields), writing.kept?.number),
+  )
   const judged = fields === null ? undefined : preview.data
   const current = settled === text && !preview.isFetching && !preview.isError
   // without a product there is nothing to judge, which is not the same as no caution

@@ -37,12 +37,12 @@ export const doseNowQuery = (number: string, key: string) =>
   })
 
 /** An order worked out and judged as it is being written; nothing is kept. */
-export const previewQuery = (fields: BathOrderFields | null) =>
+export const previewQuery = (fields: BathOrderFields | null, order: string | undefined) =>
   queryOptions({
-    queryKey: [...previewsKey, fields],
+    queryKey: [...previewsKey, fields, order],
     queryFn: ({ signal }) => {
       if (!fields) throw new Error('Nothing to judge yet')
-      return api(previewOrder, { body: fields, signal })
+      return api(previewOrder, { body: fields, query: order === undefined ? {} : { order }, signal })
     },
     enabled: fields !== null,
     placeholderData: keepPreviousData,

@@ -1,5 +1,4 @@
-import { hoursBetween } from '../../time/instant-arithmetic.ts'
-import type { AgentUse, CautionFacts } from '../caution-facts.ts'
+import { hoursApart } from '../hours-apart.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -56,13 +55,3 @@ export const formalinPermanganate = defineRule({
       })
   },
 })
-
-/** True hours between two uses; 0 when they overlap or nobody set their days. */
-function hoursApart(use: AgentUse, facts: CautionFacts, stage: 'design' | 'start'): number {
-  const startsAt = stage === 'start' ? facts.at : (valueOf(facts.order.startsAt) ?? facts.at)
-  const endsAt = valueOf(facts.order.endsAt)
-  if (use.until !== null && hoursBetween(use.until, startsAt) > 0) return hoursBetween(use.until, startsAt)
-  if (use.from !== null && endsAt !== null && hoursBetween(endsAt, use.from) > 0)
-    return hoursBetween(endsAt, use.from)
-  return 0
-}

@@ -1,4 +1,4 @@
-import { hoursBetween } from '../../time/instant-arithmetic.ts'
+import { addHours, hoursBetween } from '../../time/instant-arithmetic.ts'
 import { doseWindow } from '../../schedule/dose-window.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
@@ -39,7 +39,10 @@ export const doseSpacing = defineRule({
         params: { given: givenDoses, planned: plannedDoses },
         resolvedBy: ['amend-order'],
       })
-    const doseAt = stage === 'start' ? facts.at : valueOf(facts.order.startsAt)
+    const startsAt = valueOf(facts.order.startsAt)
+    // of an amended order the doses given before count: the next is the one after them
+    const planned = startsAt && addHours(startsAt, intervalHours * givenDoses)
+    const doseAt = stage === 'start' ? facts.at : planned
     if (lastGivenAt === null || doseAt === null || !(intervalHours > 0)) return found
     const { earlyHours, lateHours } = doseWindow(intervalHours)
     const hours = Math.max(0, hoursBetween(lastGivenAt, doseAt))
