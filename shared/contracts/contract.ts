@@ -1,4 +1,5 @@
 import type { z } from 'zod'
+import './plain-refusals.ts'
 import type { Action } from '../domain/permissions/table.ts'
 import type { ProblemCode } from './problems.ts'
 

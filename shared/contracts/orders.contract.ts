@@ -109,6 +109,10 @@ export const OrderAmount = z.object({
 
 export const OrderWater = z.object({
   enclosureCode: z.string().describe('Enclosure'),
+  vessel: z
+    .boolean()
+    .optional()
+    .describe('A treatment vessel: animals held elsewhere are brought to it for the bath'),
   bodies: z.array(z.string()).describe('Connected water now'),
   volumeText: z.string().nullable().describe('Net volume to its error'),
   volumeNote: z.string().nullable().describe('Why there is no usable volume, or how it was determined'),
@@ -301,7 +305,7 @@ export const reviseDraft = contract({
   params: orderParams,
   body: z.strictObject({ expectedVersion: Version, fields: BathOrderFields }),
   reply: { 200: Order },
-  problems: ['not-found', 'stale-version', 'order-ended', 'dose-line-not-usable'],
+  problems: ['not-found', 'may-not', 'stale-version', 'order-ended', 'dose-line-not-usable'],
 })
 
 /** A caution as it was read: an answer counts for this one alone, in these words. */

@@ -14,6 +14,8 @@ export const orderFormWords = defineMessages({
   animalsFirst: 'Choose the enclosure; everybody in its connected water is then listed here.',
   allOfThem: 'All of them',
   noneThere: 'Nobody is in this water.',
+  bring: 'Animals to be brought to this vessel',
+  bringHint: 'They stay at home until the bath; the dose is judged by who is in the vessel then.',
   animal: (p: { accession: string; name: string }) => `${p.accession} ${p.name}`,
   animalHint: (p: { count: string; code: string }) => `${p.count}, in ${p.code}`,
   sharesHint: 'Whoever is not ticked still shares the water, and is judged by the cautions.',

@@ -31,6 +31,8 @@ export type OrderField = keyof typeof orderMissing
 
 /** Why an order is refused, and what to do. */
 export const orderProblemWords = defineMessages({
+  veterinariansDraft:
+    'This is the draft of a veterinarian. Tell them what should be different, or write a proposal of your own.',
   startYears: (p: { years: number }) =>
     `The first dose lies more than ${counted(p.years, 'year', 'years')} from today. Check the year, and type the date again.`,
   lineNotInForce:

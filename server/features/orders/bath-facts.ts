@@ -35,6 +35,10 @@ export interface BathSituation {
   animals: AnimalFacts[]
 }
 
+/** Whether animals are brought to the enclosure for a bath. */
+export const isVessel = (water: WaterFacts): boolean =>
+  water.enclosures.some(({ id, treatmentVessel }) => id === water.enclosureId && treatmentVessel)
+
 export interface BathFactsParts {
   dataSource: Db
   water: WaterQuestions
@@ -47,8 +51,24 @@ export interface BathFactsParts {
  * joined to an enclosure, of everybody in it, and of what was given into it. What no table holds stays unknown.
  */
 export function createBathFactsReader(parts: BathFactsParts) {
+  /** Animals that an order names for a treatment vessel before they are in it: they are judged as its inhabitants to be. */
+  async function broughtTo(
+    water: WaterFacts,
+    inside: readonly AnimalFacts[],
+    ids: readonly string[],
+    at: Date,
+    db: Db,
+  ): Promise<AnimalFacts[]> {
+    const elsewhere = ids.filter((id) => !inside.some((animal) => animal.animalId === id))
+    if (!isVessel(water) || elsewhere.length === 0) return []
+    const found = await parts.animals.animalsById(elsewhere, at, db)
+    return found.filter((animal) => animal.enclosureId !== null && animal.count.high > 0)
+  }
+
   return {
     /**
+     * @param options.bring animals that will be brought, where the enclosure is a treatment vessel; none at the dose,
+     *                      which is judged by who is there
      * @param agent what is to be given; null while nothing is chosen, which leaves what is known of an agent unknown
      * @returns null when there is no such enclosure or it has no water
      */
@@ -56,13 +76,14 @@ export function createBathFactsReader(parts: BathFactsParts) {
       enclosureId: string,
       agent: AgentCode | null,
       at: Date,
-      options: { db?: Db; exceptOrderId?: string | null } = {},
+      options: { db?: Db; exceptOrderId?: string | null; bring?: readonly string[] } = {},
     ): Promise<BathSituation | null> {
       const db = options.db ?? parts.dataSource
       const water = await parts.water.connectedWaterAt(enclosureId, at, db)
       if (!water) return null
       const enclosureIds = water.enclosures.map((enclosure) => enclosure.id)
-      const animals = await parts.animals.animalsIn(enclosureIds, at, db)
+      const inside = await parts.animals.animalsIn(enclosureIds, at, db)
+      const animals = [...inside, ...(await broughtTo(water, inside, options.bring ?? [], at, db))]
       const taxonIds = [...new Set(animals.map((animal) => animal.taxonId))]
       // One after the other: inside a transaction there is one connection
       const uses = await readAgentUses(db, enclosureIds, at, options.exceptOrderId ?? null)

@@ -139,7 +139,10 @@ export async function readSituation(
 ): Promise<OrderSituation> {
   const product = fields.productId === null ? null : await parts.product(fields.productId)
   const line = fields.doseLineId === null ? null : await parts.doseLine(fields.doseLineId)
-  const situation = await parts.facts.read(fields.enclosureId, product?.agent ?? null, at, options)
+  const situation = await parts.facts.read(fields.enclosureId, product?.agent ?? null, at, {
+    ...options,
+    bring: options.stage === 'start' ? [] : fields.animalIds,
+  })
   if (!situation) throw noWaterProblem()
   const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
   const judgement = product

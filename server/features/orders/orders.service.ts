@@ -1,6 +1,6 @@
 import type { AnsweredCaution, BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
-import { orderWords } from '../../../shared/messages/orders.ts'
+import { orderProblemWords, orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
@@ -71,6 +71,12 @@ export function createOrdersService(parts: OrdersParts) {
     const order = await repository.lockOrder(tx, number)
     if (!order) throw new Problem('not-found')
     return order
+  }
+
+  /** A technician proposes: what a veterinarian writes is not written over. */
+  function refuseTheirDraft(context: RequestContext, order: OrderHead): void {
+    if (order.stage === 'draft' && stageFor(context) === 'proposed')
+      throw new Problem('may-not', { detail: orderProblemWords.veterinariansDraft })
   }
 
   async function refuseEnded(tx: Tx, order: OrderHead): Promise<void> {
@@ -145,6 +151,7 @@ export function createOrdersService(parts: OrdersParts) {
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await refuseEnded(tx, order)
+        refuseTheirDraft(context, order)
         await repository.saveOrder(
           tx,
           { id: order.id, version: expectedVersion },

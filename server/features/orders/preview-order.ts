@@ -6,6 +6,7 @@ import { sayDate } from '../../../shared/messages/say-date.ts'
 import { isNumberRefusalCode, sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts'
 import type { AnimalFacts } from '../animals/index.ts'
 import type { WaterFacts } from '../water/index.ts'
+import { isVessel } from './bath-facts.ts'
 import { missingFields } from './order-situation.ts'
 import type { OrderSituation } from './order-situation.ts'
 import { saidAmount, saidCautions, saidCondition, saidLine } from './say-order.ts'
@@ -23,6 +24,7 @@ export function saidWater(water: WaterFacts, animals: readonly AnimalFacts[], tr
   const usable = volume !== null && volumeRefusal === null
   return {
     enclosureCode: water.enclosureCode,
+    vessel: isVessel(water),
     bodies: water.bodies.map((body) => body.code),
     volumeText: !usable
       ? null

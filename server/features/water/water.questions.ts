@@ -71,7 +71,14 @@ export interface WaterFacts {
   enclosureCode: string
   bodies: { id: string; code: string; kind: 'enclosure' | 'sump' | 'loop'; enclosureId: string | null }[]
   /** Enclosures whose animals share this water, itself among them */
-  enclosures: { id: string; code: string; name: string; boundary: string | null }[]
+  enclosures: {
+    id: string
+    code: string
+    name: string
+    boundary: string | null
+    /** Animals are brought to it for a bath, and keep their home. */
+    treatmentVessel: boolean
+  }[]
   connections: {
     id: string
     code: string
@@ -141,7 +148,13 @@ function factsOf(found: EnclosureWater): WaterFacts {
       kind,
       enclosureId: enclosure_id,
     })),
-    enclosures: found.enclosures.map(({ id, code, name, boundary }) => ({ id, code, name, boundary })),
+    enclosures: found.enclosures.map(({ id, code, name, boundary, treatment_vessel }) => ({
+      id,
+      code,
+      name,
+      boundary,
+      treatmentVessel: treatment_vessel,
+    })),
     connections: water.connections.flatMap(({ connectionId, state, inside }) => {
       const row = byConnection.get(connectionId)
       return row ? [{ id: row.id, code: row.code, kind: row.kind, state, inside }] : []

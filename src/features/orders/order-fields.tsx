@@ -11,6 +11,7 @@ import { Combobox } from '../../ui/combobox.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
+import { AnimalChooser } from '../animals/index.ts'
 import { EnclosureChooser } from '../enclosures/index.ts'
 import { formularyQuery, rangeOfLine, useOfLine } from '../formulary/index.ts'
 import type { OrderValues } from './order-form-model.ts'
@@ -176,6 +177,18 @@ function AnimalTicks({
             {words.allOfThem}
           </Button>
         </span>
+      ) : null}
+      {water?.vessel ? (
+        <AnimalChooser
+          // empty again for the next one
+          key={values.animalIds.length}
+          label={words.bring}
+          hint={words.bringHint}
+          value={null}
+          onChange={(id) => {
+            if (id !== null && !ticked.has(id)) onChange({ animalIds: [...values.animalIds, id] })
+          }}
+        />
       ) : null}
       {animals.length > 0 ? <span className="hint">{words.sharesHint}</span> : null}
     </fieldset>
