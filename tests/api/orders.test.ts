@@ -13,9 +13,9 @@ import {
   aDraft,
   aProduct,
   aSchool,
+  answersTo,
   bathFields,
   readingsNow,
-  shownCautions,
   signDraft,
 } from '../builders/an-order.ts'
 import { newKey, password, startApi } from '../support/api.ts'
@@ -262,12 +262,8 @@ describe('an order for a bath', () => {
     const draft = await aDraft(api, praziFields())
     const { agent } = await api.as('veterinarian')
     const key = newKey()
-    const read = (await shownCautions(api, draft.number)).map(({ ruleId, code, text }) => ({
-      ruleId,
-      code,
-      text,
-    }))
-    const body = { password, expectedVersion: draft.version, read, overrides: [] }
+    const answers = await answersTo(api, draft.number)
+    const body = { password, expectedVersion: draft.version, ...answers }
     const send = () =>
       agent.post(`/api/orders/${draft.number}/signature`).set('Idempotency-Key', key).send(body)
     const replies = await Promise.all([send(), send()])

@@ -142,35 +142,43 @@ export async function aDraft(api: TestApi, fields: BathOrderFields, by?: TestPer
   }
 }
 
-/**
- * Signs a draft as the veterinarian, who answers what the form shows: reads every warning, and overrides the stops of
- * the rules that are named.
- */
+/** Signs a draft as the veterinarian, who answers what the form shows. */
 export async function signDraft(
   api: TestApi,
   draft: { number: string; version: number },
   more: { overrides?: { ruleId: string; reason: string }[]; read?: AnsweredCaution[] } = {},
 ) {
   const { agent } = await api.as('veterinarian')
-  const shown = await shownCautions(api, draft.number)
-  const named = ({ ruleId, code, text }: SaidCaution) => ({ ruleId, code, text })
+  const answers = await answersTo(api, draft.number, more.overrides)
   return agent
     .post(`/api/orders/${draft.number}/signature`)
     .set('Idempotency-Key', newKey())
     .send({
       password,
       expectedVersion: draft.version,
-      read: more.read ?? shown.filter(({ level }) => level === 'warning').map(named),
-      // these tests order the same drug for one water over and over
-      overrides: [
-        ...(more.overrides ?? []),
-        { ruleId: 'R29', reason: 'given from one of them only' },
-      ].flatMap(({ ruleId, reason }) =>
-        shown
-          .filter((one) => one.level === 'stop' && one.ruleId === ruleId)
-          .map((one) => ({ ...named(one), reason })),
-      ),
+      ...answers,
+      ...(more.read ? { read: more.read } : {}),
     })
+}
+
+/** Every warning read, and the stops of the rules that are named overridden, each as it stands on the draft now. */
+export async function answersTo(
+  api: TestApi,
+  number: string,
+  overrides: readonly { ruleId: string; reason: string }[] = [],
+) {
+  const shown = await shownCautions(api, number)
+  const named = ({ ruleId, code, text }: SaidCaution) => ({ ruleId, code, text })
+  // the tests order the same drug for one water over and over
+  const all = [...overrides, { ruleId: 'R29', reason: 'given from one of them only' }]
+  return {
+    read: shown.filter(({ level }) => level === 'warning').map(named),
+    overrides: all.flatMap(({ ruleId, reason }) =>
+      shown
+        .filter((one) => one.level === 'stop' && one.ruleId === ruleId)
+        .map((one) => ({ ...named(one), reason })),
+    ),
+  }
 }
 
 /** The cautions that stand on the draft of an order now; none where it has no draft. */
