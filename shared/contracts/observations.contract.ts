@@ -47,6 +47,16 @@ export const Observation = z.object({
   recordedById: z.string().nullable().describe('Id of that person'),
   origin: z.enum(['online', 'outbox']).describe('Sent at once, or kept on the device first'),
   unassignedDead: z.int().describe('Bodies of which nobody could say whose they are'),
+  bodiesToName: z.int().describe('Of these, bodies that still wait for a name'),
+  bodies: z
+    .object({
+      named: z.int().describe('How many were named'),
+      reason: z.string().nullable().describe('Why the rest cannot be named'),
+      by: z.string().describe('Who'),
+      at: Instant.describe('When'),
+    })
+    .nullable()
+    .describe('Bodies without a name that were named or explained later'),
   reviewed: z
     .object({
       by: z.string().describe('Who'),
@@ -104,6 +114,7 @@ export const listObservations = contract({
       .enum(['yes'])
       .optional()
       .describe('Only those marked for the veterinarian that nobody has read'),
+    bodies: z.enum(['to-name']).optional().describe('Only those with bodies that still wait for a name'),
     cursor: z.string().max(500).optional().describe('Where the last page ended'),
     limit: z.coerce.number().int().min(1).max(200).optional().describe('Rows a page, 50 unless told'),
   }),
@@ -141,6 +152,39 @@ export const voidObservation = contract({
   reply: { 200: Observation },
   problems: ['not-found', 'already-void', 'may-not'],
   idempotent: 'by-key',
+})
+
+export const nameBodies = contract({
+  id: 'nameBodies',
+  method: 'post',
+  path: '/observations/:id/bodies',
+  action: 'discrepancy.resolve',
+  summary: 'Say whose the bodies were that nobody could name, or why that will never be known',
+  params: z.strictObject({ id: RecordId }),
+  body: z.strictObject({
+    id: RecordId,
+    deaths: z
+      .array(
+        z.strictObject({
+          id: RecordId.describe('Id of the death'),
+          accession: AccessionNumber,
+          count: WholeCount,
+        }),
+      )
+      .max(100)
+      .describe('Whose they are; each goes into the ledger of its animal'),
+    reason: Reason.optional().describe('Why the rest cannot be named; needed where any is left'),
+  }),
+  reply: { 201: Observation },
+  problems: [
+    'not-found',
+    'id-already-used',
+    'already-explained',
+    'already-void',
+    'cause-signed',
+    'reason-needed',
+  ],
+  idempotent: 'by-record-id',
 })
 
 /** Everything that a phone needs at a tank, kept on it for when there is no signal. */

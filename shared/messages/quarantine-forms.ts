@@ -1,4 +1,4 @@
-import { defineMessages } from './define-messages.ts'
+import { counted, defineMessages } from './define-messages.ts'
 
 /** What is recorded of a quarantine case: the forms of its sheet. */
 export const caseForms = defineMessages({
@@ -165,4 +165,24 @@ export const caseForms = defineMessages({
   clearCannot: 'This case can’t be cleared yet',
   backToCase: 'Back to the case',
   alreadyEnded: 'This case has ended. What was signed stands on its sheet.',
+})
+
+/** Whose the bodies of an observation were. */
+export const observationForms = defineMessages({
+  nameBodies: 'Name the bodies',
+  bodiesQuestion: (p: { enclosure: string }) => `Whose bodies were those in ${p.enclosure}?`,
+  bodiesAct: 'Record whose they were',
+  bodiesLeft: (p: { count: number }) =>
+    p.count === 0 ? 'Every body has a name.' : `${counted(p.count, 'body', 'bodies')} without a name.`,
+  whoWasThere: 'Who was there then',
+  bodiesOf: (p: { accession: string; animal: string }) => `Dead of ${p.accession}, ${p.animal}`,
+  bodiesReason: 'Why the rest cannot be named',
+  bodiesReasonHint: 'For example: eaten, too old to tell, not of this collection, counted before.',
+  tooManyNamed: 'More are named than were found',
+  nameOrExplain: 'Name every body, or say why that cannot be',
+  bodiesRecorded: 'Recorded whose the bodies were',
+  bodiesWaiting: (p: { count: number }) => `${counted(p.count, 'body waits', 'bodies wait')} for a name`,
+  bodiesNamed: (p: { count: number; by: string }) =>
+    `${counted(p.count, 'body', 'bodies')} named later by ${p.by}`,
+  bodiesExplained: (p: { by: string }) => `Explained by ${p.by}`,
 })

@@ -1,4 +1,4 @@
-import { defineMessages } from './define-messages.ts'
+import { counted, defineMessages } from './define-messages.ts'
 import type { ObservationRefusal } from '../domain/observations/check-observation.ts'
 import type { ProtocolRefusal } from '../domain/protocol/check-protocol.ts'
 
@@ -57,5 +57,13 @@ export const observationDetails = defineMessages({
   noSuchEnclosure: 'There is no such enclosure.',
   notInThere: (p: { accession: string; code: string }) => `${p.accession} was not in ${p.code} at that time.`,
   oldForm: 'This entry was made with a form that is no longer taken. Enter it again with its own time.',
+  moreThanBodies: (p: { left: number }) =>
+    `Only ${counted(p.left, 'body has', 'bodies have')} no name in this observation. Name no more than that.`,
+  restNeedsReason: 'Some of the bodies have no name yet. Name all of them, or say why that cannot be.',
+  bodiesNamed: 'The bodies were named later',
+  bodiesSigned: (p: { number: string }) =>
+    `A veterinarian signed the cause of these deaths in ${p.number}. A veterinarian strikes that signature out there first, with a reason.`,
+  noSuchAnimal: (p: { accession: string }) =>
+    `There is no animal or group ${p.accession}. Choose one from the list.`,
   ownOrVet: 'An observation is struck out by who made it, or by a veterinarian.',
 })

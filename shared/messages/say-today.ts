@@ -53,6 +53,7 @@ const titles = defineMessages({
   'case-ready': (t: Told) => `Decide, ${caseWords(t)}`,
   'dose-exceptions': (t: Told) => `Review the dose, ${beside(t.text('enclosure'), t.drug)}`,
   'discrepancy-veterinarian': (t: Told) => `Explain, ${t.text('accession')} ${t.text('animal')}`,
+  'bodies-veterinarian': sayBodies,
   'bath-running': (t: Told) => `${t.drug} bath, ${t.text('enclosure')}`,
   'second-calculation': (t: Told) => `Second calculation, ${beside(t.text('enclosure'), t.drug)}`,
   dose: (t: Told) => `${t.drug} bath, ${t.text('enclosure')}`,
@@ -66,6 +67,7 @@ const titles = defineMessages({
     beside(t.has('step') ? t.text('step') : 'Daily look', `${t.text('enclosure')} ${t.text('name')}`),
   care: (t: Told) => beside(t.text('step'), t.text('enclosure')),
   'discrepancy-registrar': (t: Told) => `Explain, ${t.text('accession')} ${t.text('animal')}`,
+  'bodies-registrar': sayBodies,
   'movement-marked': (t: Told) => `Moved against a rule, ${t.text('accession')} ${t.text('animal')}`,
   'transaction-marks': (t: Told) => `${t.text('number')} goes beyond a permit`,
   'transaction-papers': (t: Told) =>
@@ -109,6 +111,7 @@ const notes = defineMessages({
   'dose-exceptions': (t: Told) =>
     beside(t.text('number'), 'recorded though a rule stood against it', byAndWhen(t)),
   'discrepancy-veterinarian': sayDoesNotFit,
+  'bodies-veterinarian': byAndWhen,
   'bath-running': (t: Told) => beside(t.text('number'), `begun ${t.at}`, t.text('by')),
   'second-calculation': (t: Told) =>
     beside(t.text('number'), `dose ${t.text('key')}`, `first by ${t.text('by')}, ${t.at}`),
@@ -130,6 +133,7 @@ const notes = defineMessages({
   observation: (t: Told) => beside(t.text('case'), dayOf(t), lastLook(t)),
   care: sayStep,
   'discrepancy-registrar': sayDoesNotFit,
+  'bodies-registrar': byAndWhen,
   'movement-marked': (t: Told) => `${sayDoesNotFit(t)}. It waits for a veterinarian.`,
   'transaction-marks': sayTransaction,
   'transaction-papers': (t: Told) =>
@@ -141,6 +145,10 @@ const notes = defineMessages({
   'setting-proposed': (t: Told) => byAndWhen(t),
   'settings-default': () => 'They stand as this program set them.',
 } satisfies Record<TodayKind, Say>)
+
+function sayBodies(t: Told): string {
+  return `Whose are they? ${counted(t.number('dead'), 'animal', 'animals')} found dead, ${t.text('enclosure')}`
+}
 
 function sayStep(t: Told): string {
   return beside(

@@ -5,6 +5,7 @@ import { anEnclosure } from '../builders/a-water.ts'
 import { anObservation } from '../builders/an-observation.ts'
 import type { ObservationBody } from '../builders/an-observation.ts'
 import { newKey, startApi } from '../support/api.ts'
+import { worklistOf } from '../support/worklist.ts'
 import type { TestApi } from '../support/api.ts'
 
 let api: TestApi
@@ -100,6 +101,69 @@ describe('an observation', () => {
     expect(body.animals).toEqual({ low: 4, high: 4 })
     expect(body.deaths).toMatchObject([{ count: 2, accession: null, finding: 'unexplained' }])
     expect(body.earliestClearanceOn).toBe('2026-12-15')
+    const named = await (
+      await api.as('veterinarian')
+    ).agent
+      .post(`/api/observations/${String(reply.body.id)}/bodies`)
+      .send({
+        id: api.nextId(),
+        deaths: [{ id: api.nextId(), accession: one.animal.accession, count: 1 }],
+        reason: 'the other was too old to tell',
+      })
+    expect(named.status).toBe(201)
+    const after = (await tech.agent.get(one.url)).body
+    expect(after.animals).toEqual({ low: 3, high: 3 })
+    expect(
+      after.deaths.map((row: { count: number; accession: string }) => [row.count, row.accession]),
+    ).toEqual(
+      expect.arrayContaining([
+        [1, one.animal.accession],
+        [1, null],
+      ]),
+    )
+    expect(after.deaths).toHaveLength(2)
+  })
+
+  it('asks on the worklist whose bodies outside quarantine were, and takes the answer into the ledgers once', async () => {
+    const enclosure = await anEnclosure(api, 'OB-HALL')
+    const taxonId = await aFish(api)
+    const place = { taxonId, enclosureId: enclosure.id }
+    const school = await aGroup(api, { ...place, count: 6 })
+    const other = await aGroup(api, { ...place, count: 4 })
+    const worklist = worklistOf(api)
+    const seen = await send(anObservation(api, enclosure.code, { foundDead: 3 }))
+    expect(seen.body).toMatchObject({ unassignedDead: 3, bodiesToName: 3, bodies: null, cases: [] })
+    const id = seen.body.id as string
+    expect(await worklist.rolesThatSee('bodies-veterinarian', id)).toEqual(['veterinarian'])
+    expect(await worklist.rolesThatSee('bodies-registrar', id)).toEqual(['registrar'])
+
+    const name = async (role: 'keeper' | 'registrar', body: object) =>
+      (await api.as(role)).agent.post(`/api/observations/${id}/bodies`).send({ id: api.nextId(), ...body })
+    const death = (accession: string, count: number) => ({ id: api.nextId(), accession, count })
+    expect((await name('keeper', { deaths: [death(school.accession, 3)] })).status).toBe(403)
+    expect((await name('registrar', { deaths: [death(school.accession, 4)] })).body.errors[0].pointer).toBe(
+      '/deaths',
+    )
+    expect((await name('registrar', { deaths: [death('A-9999', 3)] })).body.errors[0].pointer).toBe(
+      '/deaths/0/accession',
+    )
+    expect((await name('registrar', { deaths: [] })).body.code).toBe('reason-needed')
+    const answer = {
+      id: api.nextId(),
+      deaths: [death(school.accession, 1), death(other.accession, 1)],
+      reason: 'one was eaten down to the spine',
+    }
+    for (let i = 0; i < 2; i++) {
+      const named = await name('registrar', answer)
+      expect([named.status, named.body.bodiesToName]).toEqual([201, 0])
+      expect(named.body.bodies).toMatchObject({ named: 2, reason: answer.reason, by: 'Test registrar' })
+    }
+    expect((await name('registrar', { ...answer, id: api.nextId() })).body.code).toBe('already-explained')
+    const { agent } = await api.as('keeper')
+    const counts = await agent.get(`${school.url}/counts`)
+    expect(counts.body.deaths).toMatchObject([{ seenCount: 1, place: { code: 'OB-HALL' } }])
+    expect((await agent.get(other.url)).body.count.ledger).toBe(3)
+    expect(await worklist.rolesThatSee('bodies-registrar', id)).toEqual([])
   })
 
   it('counts a group, says when the count differs, and never takes "not counted" for a number', async () => {

@@ -17,6 +17,7 @@ import { clearanceRoutes } from './clearance.routes.ts'
 import { createCasesService } from './cases.service.ts'
 import { NoticeActRow, NoticeDeliveryRow, NoticeRow } from './notice.entity.ts'
 import {
+  ObservationBodiesRow,
   ObservationCaseRow,
   ObservationDeathRow,
   ObservationReviewRow,
@@ -24,6 +25,7 @@ import {
   ObservationVoidRow,
 } from './observation.entity.ts'
 import { ProtocolConfirmationRow, ProtocolRow, ProtocolVersionRow } from './protocol.entity.ts'
+import { createBodiesService } from './bodies.service.ts'
 import { createNoticesService } from './notices.service.ts'
 import { createObservationQueries } from './observations.queries.ts'
 import { observationRoutes } from './observations.routes.ts'
@@ -50,6 +52,7 @@ export const quarantineEntities = [
   ObservationDeathRow,
   ObservationVoidRow,
   ObservationReviewRow,
+  ObservationBodiesRow,
   NoticeRow,
   NoticeDeliveryRow,
   NoticeActRow,
@@ -77,6 +80,7 @@ export function createQuarantine(
   const protocols = createProtocolsService(parts)
   const notices = createNoticesService(parts)
   const observations = createObservationsService({ ...parts, writer, notices })
+  const bodies = createBodiesService({ ...parts, writer })
   const queries = createQuarantineQueries(parts)
   const observationQueries = createObservationQueries(parts)
   const clearance = createClearanceService({ ...parts, writer })
@@ -84,7 +88,7 @@ export function createQuarantine(
   const print = createClearancePrinter({ ...parts, documents, queries })
   prints.answerFor(clearancePrintKind, answerForClearance(queries))
   return {
-    services: { cases, events, treatments, protocols, observations, notices, clearance },
+    services: { cases, events, treatments, protocols, observations, bodies, notices, clearance },
     queries,
     /** Prints the certificate of a cleared case. */
     printClearance: print,
@@ -95,7 +99,7 @@ export function createQuarantine(
     routes: [
       ...quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
       ...clearanceRoutes({ clearance, queries, print, clock: parts.clock }),
-      ...observationRoutes({ observations, notices, queries: observationQueries }),
+      ...observationRoutes({ observations, bodies, notices, queries: observationQueries }),
     ],
     /** Work that runs beside the requests. */
     jobs: { 'send-notice': (payload: { id: string }) => notices.send(payload) },

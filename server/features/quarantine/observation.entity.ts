@@ -62,3 +62,15 @@ export class ObservationReviewRow {
   @Column({ type: 'timestamptz', name: 'recorded_at' }) recordedAt!: Date
   @Column({ type: 'uuid', name: 'recorded_by', nullable: true }) recordedBy!: string | null
 }
+
+/** Whose the bodies were that the observation could not name, found out later; or why nobody will know. */
+@Entity('observation_bodies')
+export class ObservationBodiesRow {
+  @PrimaryColumn({ type: 'uuid' }) id!: string
+  @Column({ type: 'uuid', name: 'observation_id' }) observationId!: string
+  /** Of the bodies without a name, those named now. */
+  @Column({ type: 'integer', name: 'named_count' }) namedCount!: number
+  @Column({ type: 'text', nullable: true }) reason!: string | null
+  @Column({ type: 'timestamptz', name: 'recorded_at' }) recordedAt!: Date
+  @Column({ type: 'uuid', name: 'recorded_by', nullable: true }) recordedBy!: string | null
+}

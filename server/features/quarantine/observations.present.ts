@@ -32,6 +32,16 @@ export function presentObservation(row: ObservationReadRow): Observation {
     count: presentCount(row),
     foundDead: row.found_dead,
     unassignedDead: row.unassigned_dead,
+    bodiesToName: row.bodies_to_name,
+    bodies:
+      row.bodies_named === null || row.bodies_at === null
+        ? null
+        : {
+            named: row.bodies_named,
+            reason: row.bodies_reason,
+            by: row.bodies_by ?? '',
+            at: row.bodies_at.toISOString(),
+          },
     forVeterinarian: row.for_veterinarian,
     urgent: row.urgent,
     reviewed: row.reviewed_at

@@ -62,10 +62,11 @@ export function createObservationQueries(parts: {
       query: QueryOf<typeof contracts.listObservations>,
     ): Promise<ReplyOf<typeof contracts.listObservations>> {
       const page = pageOf(query)
-      const { case: number, enclosure, waiting } = query
+      const { case: number, enclosure, waiting, bodies } = query
       const rows = await readObservations(db, {
         ...page,
         waiting: waiting === 'yes',
+        bodiesToName: bodies === 'to-name',
         ...(number === undefined ? {} : { case: number }),
         ...(enclosure === undefined ? {} : { enclosure }),
       })

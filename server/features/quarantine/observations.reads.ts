@@ -33,6 +33,11 @@ export interface ObservationReadRow {
   unassigned_dead: number
   for_veterinarian: boolean
   urgent: boolean
+  bodies_to_name: number
+  bodies_named: number | null
+  bodies_reason: string | null
+  bodies_by: string | null
+  bodies_at: Date | null
   reviewed_by: string | null
   reviewed_at: Date | null
   reviewed_words: string | null
@@ -49,6 +54,7 @@ export interface ObservationsFilter {
   case?: string
   enclosure?: string
   waiting?: boolean
+  bodiesToName?: boolean
   offset?: number
   limit?: number
 }
@@ -63,7 +69,9 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
             o.happened_at, o.happened_on::text AS happened_on, o.said_at, o.time_doubtful, o.recorded_at,
             o.recorded_by, w.printed_name AS recorded_by_name, o.origin, o.looked_at, o.feeding, o.breathing, o.skin,
             o.signs, o.words, o.count_basis, o.count_low, o.count_high, o.found_dead, o.unassigned_dead,
-            o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,
+            CASE WHEN b.id IS NULL AND v.id IS NULL THEN o.unassigned_dead ELSE 0 END AS bodies_to_name,
+            b.named_count AS bodies_named, b.reason AS bodies_reason, bp.printed_name AS bodies_by,
+            b.recorded_at AS bodies_at, o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,
             r.words AS reviewed_words, v.reason AS voided_reason, n.id AS notice_id,
             (SELECT count(*)::int FROM notice_acts a WHERE a.notice_id = n.id AND a.kind = 'seen'
                 AND ${seenByAnother('a')}) AS notice_seen,
@@ -79,12 +87,15 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
                            ORDER BY r.recorded_at DESC, r.id DESC LIMIT 1) r ON true
        LEFT JOIN people rp ON rp.id = r.recorded_by
        LEFT JOIN observation_voids v ON v.observation_id = o.id
+       LEFT JOIN observation_bodies b ON b.observation_id = o.id
+       LEFT JOIN people bp ON bp.id = b.recorded_by
        LEFT JOIN notices n ON n.observation_id = o.id
       WHERE ($1::uuid IS NULL OR o.id = $1)
         AND ($2::text IS NULL OR EXISTS (SELECT 1 FROM observation_cases k JOIN quarantine_cases c ON c.id = k.case_id
                                           WHERE k.observation_id = o.id AND c.number = $2))
         AND ($3::text IS NULL OR e.code = $3)
         AND (NOT $4::boolean OR (o.for_veterinarian AND r.id IS NULL AND v.id IS NULL))
+        AND (NOT $7::boolean OR (o.unassigned_dead > 0 AND b.id IS NULL AND v.id IS NULL))
       ORDER BY o.happened_at DESC, o.id DESC
       LIMIT $5 OFFSET $6`,
     [
@@ -94,6 +105,7 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
       filter.waiting ?? false,
       filter.limit ?? 50,
       filter.offset ?? 0,
+      filter.bodiesToName ?? false,
     ],
   )
 }

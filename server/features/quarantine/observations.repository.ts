@@ -1,6 +1,7 @@
 import type { Tx } from '../../platform/database/transactions.ts'
 import { insertOnce, isRepeated } from '../../platform/database/rows.ts'
 import {
+  ObservationBodiesRow,
   ObservationCaseRow,
   ObservationDeathRow,
   ObservationReviewRow,
@@ -50,4 +51,32 @@ export function insertReview(tx: Tx, row: ObservationReviewRow): Promise<{ creat
 
 export async function insertVoid(tx: Tx, row: ObservationVoidRow): Promise<void> {
   await tx.manager.insert(ObservationVoidRow, row)
+}
+
+export function isVoided(tx: Tx, observationId: string): Promise<boolean> {
+  return tx.manager.existsBy(ObservationVoidRow, { observationId })
+}
+
+export function findBodies(tx: Tx, observationId: string): Promise<ObservationBodiesRow | null> {
+  return tx.manager.findOneBy(ObservationBodiesRow, { observationId })
+}
+
+export function insertBodies(tx: Tx, row: ObservationBodiesRow): Promise<{ created: boolean }> {
+  return insertOnce(tx, ObservationBodiesRow, row, ['observationId', 'namedCount', 'reason'])
+}
+
+/** The event of a case that stands for bodies that the observation could not name; null where there is none. */
+export async function findBodiesEvent(
+  tx: Tx,
+  observationId: string,
+): Promise<{ id: string; number: string; isSigned: boolean } | null> {
+  const [row]: { id: string; number: string; is_signed: boolean }[] = await tx.manager.query(
+    `SELECT e.id, c.number,
+            EXISTS (SELECT 1 FROM live_case_events s
+                     WHERE s.kind = 'death-cause-signed' AND s.facts ->> 'deathEventId' = e.id::text) AS is_signed
+       FROM live_case_events e JOIN quarantine_cases c ON c.id = e.case_id
+      WHERE e.observation_id = $1 AND e.kind = 'death'`,
+    [observationId],
+  )
+  return row ? { id: row.id, number: row.number, isSigned: row.is_signed } : null
 }

@@ -2,6 +2,7 @@ import * as notices from '../../../shared/contracts/notices.contract.ts'
 import * as contracts from '../../../shared/contracts/observations.contract.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
+import type { BodiesService } from './bodies.service.ts'
 import type { NoticesService } from './notices.service.ts'
 import type { ObservationQueries } from './observations.queries.ts'
 import type { ObservationsService } from './observations.service.ts'
@@ -9,6 +10,7 @@ import type { ObservationsService } from './observations.service.ts'
 /** Observations, the round, and urgent calls. */
 export function observationRoutes(parts: {
   observations: ObservationsService
+  bodies: BodiesService
   notices: NoticesService
   queries: ObservationQueries
 }): Route[] {
@@ -25,6 +27,10 @@ export function observationRoutes(parts: {
     }),
     route(contracts.voidObservation, async ({ params, body, context }) => {
       await observations.strike(context, params.id, body.reason)
+      return queries.observation(params.id)
+    }),
+    route(contracts.nameBodies, async ({ params, body, context }) => {
+      await parts.bodies.nameBodies(context, params.id, body)
       return queries.observation(params.id)
     }),
     route(contracts.getRound, () => queries.round()),

@@ -2,6 +2,7 @@ import type { Notice } from '../../../shared/contracts/notices.contract.ts'
 import type { Observation } from '../../../shared/contracts/observations.contract.ts'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { isForRoles } from '../../../shared/domain/today/today-kinds.ts'
 import { waiting, work } from './work.ts'
 import type { Moment } from './work.ts'
 
@@ -49,5 +50,27 @@ export function gatherFlagged(observations: readonly Observation[], moment: Mome
       },
       acts: mayRead ? ['mark-read'] : [],
     }),
+  )
+}
+
+/** Bodies that nobody could name: the veterinarian asks what died, the registrar which count is too high now. */
+export function gatherBodies(observations: readonly Observation[], moment: Moment): TodayWork[] {
+  return observations.flatMap((one) =>
+    (['bodies-veterinarian', 'bodies-registrar'] as const)
+      .filter((kind) => isForRoles(kind, moment.actor.roles))
+      .map((kind) =>
+        waiting({
+          id: `${kind}:${one.id}`,
+          kind,
+          at: one.happenedAt,
+          params: {
+            observationId: one.id,
+            enclosure: one.enclosure,
+            by: one.recordedBy,
+            dead: one.bodiesToName,
+            ...(one.cases[0] === undefined ? {} : { case: one.cases[0] }),
+          },
+        }),
+      ),
   )
 }

@@ -10,7 +10,7 @@ import type { TodayParts } from './index.ts'
 import { gatherDiscrepancies } from './gather-discrepancies.ts'
 import { gatherDoses } from './gather-doses.ts'
 import type { GatheredDoses } from './gather-doses.ts'
-import { gatherFlagged, gatherNotices } from './gather-observations.ts'
+import { gatherBodies, gatherFlagged, gatherNotices } from './gather-observations.ts'
 import { gatherOrders } from './gather-orders.ts'
 import { gatherOwnLicence, gatherPeople } from './gather-people.ts'
 import { gatherQuarantine } from './gather-quarantine.ts'
@@ -69,28 +69,41 @@ export function createTodayQueries(parts: TodayParts) {
       const readsOrders = decide('order.read', actor.roles).allowed
       const seesTanks = seesLane('decide') || seesLane('doses') || seesLane('watch')
 
-      const [tanks, cases, notices, flagged, recent, water, register, discrepancies, people, handover, own] =
-        await Promise.all([
-          readsOrders && seesTanks ? gatherTanks(moment) : { items: [], recent: [] },
-          seesTanks ? gatherCases(moment) : none,
-          sees('urgent-call') ? quarantine.observationQueries.notices(true) : none,
-          sees('observation-flagged')
-            ? quarantine.observationQueries.observations({ waiting: 'yes', limit: mostFlagged })
-            : { rows: [] },
-          seesTanks
-            ? quarantine.observationQueries.observations({ limit: loggedObservations })
-            : { rows: [] },
-          sees('volume-to-confirm') ? gatherWater(parts.water.questions, moment) : none,
-          seesLane('register') ? gatherRegister(parts, moment) : none,
-          sees('discrepancy-veterinarian') || sees('discrepancy-registrar')
-            ? parts.animals.queries.discrepancies({ state: 'open', limit: mostFlagged })
-            : { rows: [] },
-          seesLane('people')
-            ? Promise.all([parts.people.questions.accounts(now), facility.listSettings()])
-            : null,
-          sees('observation') ? parts.handover.notesSince(handoverSince(now), actor.personId) : none,
-          sees('own-licence') ? gatherOwnLicence(parts.people, moment) : none,
-        ])
+      const [
+        tanks,
+        cases,
+        notices,
+        flagged,
+        recent,
+        water,
+        register,
+        discrepancies,
+        bodies,
+        people,
+        handover,
+        own,
+      ] = await Promise.all([
+        readsOrders && seesTanks ? gatherTanks(moment) : { items: [], recent: [] },
+        seesTanks ? gatherCases(moment) : none,
+        sees('urgent-call') ? quarantine.observationQueries.notices(true) : none,
+        sees('observation-flagged')
+          ? quarantine.observationQueries.observations({ waiting: 'yes', limit: mostFlagged })
+          : { rows: [] },
+        seesTanks ? quarantine.observationQueries.observations({ limit: loggedObservations }) : { rows: [] },
+        sees('volume-to-confirm') ? gatherWater(parts.water.questions, moment) : none,
+        seesLane('register') ? gatherRegister(parts, moment) : none,
+        sees('discrepancy-veterinarian') || sees('discrepancy-registrar')
+          ? parts.animals.queries.discrepancies({ state: 'open', limit: mostFlagged })
+          : { rows: [] },
+        sees('bodies-veterinarian') || sees('bodies-registrar')
+          ? quarantine.observationQueries.observations({ bodies: 'to-name', limit: mostFlagged })
+          : { rows: [] },
+        seesLane('people')
+          ? Promise.all([parts.people.questions.accounts(now), facility.listSettings()])
+          : null,
+        sees('observation') ? parts.handover.notesSince(handoverSince(now), actor.personId) : none,
+        sees('own-licence') ? gatherOwnLicence(parts.people, moment) : none,
+      ])
 
       const items = [
         ...tanks.items,
@@ -100,6 +113,7 @@ export function createTodayQueries(parts: TodayParts) {
         ...water,
         ...register,
         ...gatherDiscrepancies(discrepancies.rows, moment),
+        ...gatherBodies(bodies.rows, moment),
         ...(people ? gatherPeople(...people, moment) : []),
         ...own,
       ]

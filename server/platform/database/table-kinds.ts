@@ -97,6 +97,7 @@ export const tableKinds: Record<string, TableKind> = {
   observation_deaths: 'ledger',
   observation_voids: 'ledger',
   observation_reviews: 'ledger',
+  observation_bodies: 'ledger',
   case_events: 'ledger',
   case_step_records: 'ledger',
   notices: 'ledger',

@@ -2,7 +2,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query'
 import * as events from '../../../shared/contracts/case-events.contract.ts'
 import { clearCase } from '../../../shared/contracts/clearance.contract.ts'
 import type { BodyOf, Contract } from '../../../shared/contracts/contract.ts'
-import { reviewObservation } from '../../../shared/contracts/observations.contract.ts'
+import { nameBodies, reviewObservation } from '../../../shared/contracts/observations.contract.ts'
 import * as cases from '../../../shared/contracts/quarantine.contract.ts'
 import { api } from '../../lib/api-client.ts'
 import type { CallOptions } from '../../lib/api-client.ts'
@@ -96,3 +96,6 @@ export const useClearCase = (number: string) =>
 /** A veterinarian has read an observation. */
 export const useReviewObservation = () =>
   useQuarantineMutation(reviewObservation, (id: string) => ({ params: { id }, body: { id: newId() } }))
+
+export const useNameBodies = (id: string) =>
+  useQuarantineMutation(nameBodies, (body: BodyOf<typeof nameBodies>) => ({ params: { id }, body }))

@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import type { ReactNode } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
@@ -5,6 +6,7 @@ import type { Observation } from '../../../shared/contracts/observations.contrac
 import { daysBetween, wallClockOf } from '../../../shared/domain/time/facility-date.ts'
 import { noticeStateWords } from '../../../shared/messages/notices.ts'
 import { sayObservation } from '../../../shared/messages/observations.ts'
+import { observationForms } from '../../../shared/messages/quarantine-forms.ts'
 import { quarantineWords as words } from '../../../shared/messages/quarantine-screens.ts'
 import { sayTime } from '../../../shared/messages/say-date.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
@@ -17,6 +19,7 @@ import { longDay } from '../../ui/day-words.ts'
 import { LogColumn } from '../../ui/log-column.tsx'
 import type { LogEntry } from '../../ui/log-column.tsx'
 import { Tag } from '../../ui/tag.tsx'
+import { BodiesDialog } from './bodies-dialog.tsx'
 import { useReviewObservation } from './mutations.ts'
 import { observationsQuery } from './queries.ts'
 
@@ -70,6 +73,8 @@ export function ObservationLog({
 function ObservationWords({ row, numbered, zone }: { row: Observation; numbered: boolean; zone: string }) {
   const now = new Date().toISOString()
   const may = useMay('chart.write')
+  const mayName = useMay('discrepancy.resolve')
+  const [naming, setNaming] = useState(false)
   const review = useReviewObservation()
   const said = `${sayObservation(row).join('. ')}.`
   return (
@@ -104,6 +109,26 @@ function ObservationWords({ row, numbered, zone }: { row: Observation; numbered:
           </Link>
         </span>
       ) : null}
+      {row.bodiesToName > 0 ? (
+        <span className="block pt-1">
+          <Tag>{observationForms.bodiesWaiting({ count: row.bodiesToName })}</Tag>
+          {mayName.allowed ? (
+            <Button size="small" className="mt-1 block" onClick={() => setNaming(true)}>
+              {observationForms.nameBodies}
+              <span className="visually-hidden"> {row.enclosure}</span>
+            </Button>
+          ) : null}
+        </span>
+      ) : null}
+      {row.bodies ? (
+        <span className="t-note block">
+          {row.bodies.named > 0
+            ? observationForms.bodiesNamed({ count: row.bodies.named, by: row.bodies.by })
+            : observationForms.bodiesExplained({ by: row.bodies.by })}
+          {row.bodies.reason === null ? null : words.readWith({ words: row.bodies.reason })}
+        </span>
+      ) : null}
+      {naming ? <BodiesDialog observation={row} onBack={() => setNaming(false)} /> : null}
       {row.forVeterinarian ? (
         <span className="block pt-1">
           <Tag>{words.forVeterinarian}</Tag>

@@ -9,6 +9,8 @@ const toDose = (told: Params) => paths.orderSheet(told('number'), told('key'))
 const toAnimal = (told: Params) => paths.animal(told('accession'))
 const toPerson = (told: Params) => paths.person(told('personId'))
 const toVolumes = (told: Params) => paths.enclosureVolumes(told('enclosure'))
+const toBodies = (told: Params) =>
+  told('case') === '' ? paths.quarantine() : paths.quarantineCase(told('case'))
 const toCaseOrPlace = (told: Params) =>
   told('case') === '' ? paths.enclosure(told('enclosure')) : paths.quarantineCase(told('case'))
 
@@ -23,6 +25,7 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   'case-ready': (told) => paths.clearCase(told('case')),
   'dose-exceptions': toDose,
   'discrepancy-veterinarian': toAnimal,
+  'bodies-veterinarian': toBodies,
   'bath-running': toDose,
   'second-calculation': toDose,
   dose: toDose,
@@ -34,6 +37,7 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   observation: (told) => paths.observe(told('enclosure')),
   care: toCase,
   'discrepancy-registrar': toAnimal,
+  'bodies-registrar': toBodies,
   'movement-marked': toAnimal,
   'transaction-marks': (told) => paths.transaction(told('number')),
   'transaction-papers': (told) =>
