@@ -3,15 +3,8 @@ import { animalForms, birthKinds, identifierKinds, lifeStages, sexes } from '../
 import { sourceCodes } from '../domain/register/permit-kinds.ts'
 import { acquisitionKinds, dispositionKinds } from '../domain/register/transaction-kinds.ts'
 import { NewCounterparty } from './counterparties.contract.ts'
-import { Instant, LocalDate, RecordId } from './primitives.ts'
-import {
-  AnimalCount,
-  optionalWords,
-  PartialDateText,
-  Stage,
-  TimeOfDay,
-  words,
-} from './register-primitives.ts'
+import { Instant, LocalDate, noneTwice, PartialDate, RecordId } from './primitives.ts'
+import { AnimalCount, optionalWords, Stage, TimeOfDay, words } from './register-primitives.ts'
 
 const Estimate = z
   .strictObject({
@@ -23,7 +16,7 @@ const Estimate = z
 const PlaceGiven = z
   .strictObject({
     locality: optionalWords(500, 'Where it was collected, found or released'),
-    on: PartialDateText.nullish().describe('When it was collected, where that differs'),
+    on: PartialDate.nullish().describe('When it was collected, where that differs'),
     method: optionalWords(200, 'How it was collected'),
     latitude: z.number().min(-90).max(90).nullish().describe('Decimal degrees, WGS 84'),
     longitude: z.number().min(-180).max(180).nullish().describe('Decimal degrees, WGS 84'),
@@ -45,7 +38,7 @@ const TransportGiven = z
 const shared = {
   id: RecordId,
   stage: Stage,
-  on: PartialDateText,
+  on: PartialDate,
   time: TimeOfDay.nullish().describe('Local time of day, where the date is exact and the time is known'),
   counterpartyId: RecordId.nullish().describe('The other party'),
   newCounterparty: NewCounterparty.nullish().describe('The other party, entered with the transaction'),
@@ -54,19 +47,21 @@ const shared = {
   transport: TransportGiven.nullish().describe('How the animals travelled'),
   loanDueOn: LocalDate.nullish().describe('Last day of a loan'),
   note: optionalWords(4000, 'Note'),
-  permitUses: z
-    .array(
-      z
-        .strictObject({
-          id: RecordId,
-          permitId: RecordId.describe('The permit'),
-          lineId: RecordId.describe('The line it is used for'),
-          quantity: AnimalCount.describe('Whole animals taken under it'),
-        })
-        .describe('A use of a permit'),
-    )
-    .max(100)
-    .describe('What is taken under which permit'),
+  permitUses: noneTwice(
+    z
+      .array(
+        z
+          .strictObject({
+            id: RecordId,
+            permitId: RecordId.describe('The permit'),
+            lineId: RecordId.describe('The line it is used for'),
+            quantity: AnimalCount.describe('Whole animals taken under it'),
+          })
+          .describe('A use of a permit'),
+      )
+      .max(100),
+    ['permitId', 'lineId'],
+  ).describe('What is taken under which permit'),
 }
 
 const NewAnimal = z
@@ -80,24 +75,26 @@ const NewAnimal = z
     sex: z.enum(sexes).describe('Sex'),
     lifeStage: z.enum(lifeStages).describe('Stage of life'),
     birthKind: z.enum(birthKinds).nullish().describe('How it came into being'),
-    birthDate: PartialDateText.nullish().describe('When'),
+    birthDate: PartialDate.nullish().describe('When'),
     birthApproximate: z.boolean().optional().describe('The date is an estimate'),
     count: AnimalCount.describe('Animals alive on arrival; 1 for an individual'),
     estimate: Estimate.nullish().describe('Set where the number is an estimate'),
     enclosureId: RecordId.describe('Enclosure they go into'),
     deadOnArrival: z.int().min(0).max(1_000_000).nullish().describe('Dead in the boxes, never accessioned'),
-    identifiers: z
-      .array(
-        z
-          .strictObject({
-            id: RecordId,
-            kind: z.enum(identifierKinds).describe('Kind of mark'),
-            value: words(100).describe('The mark as read'),
-            place: words(100).optional().describe('Where on the animal'),
-          })
-          .describe('A mark it came with or was given'),
-      )
-      .max(10)
+    identifiers: noneTwice(
+      z
+        .array(
+          z
+            .strictObject({
+              id: RecordId,
+              kind: z.enum(identifierKinds).describe('Kind of mark'),
+              value: words(100).describe('The mark as read'),
+              place: words(100).optional().describe('Where on the animal'),
+            })
+            .describe('A mark it came with or was given'),
+        )
+        .max(10),
+    )
       .optional()
       .describe('Marks it came with or was given'),
     theirNumber: optionalWords(100, 'Number it had with the other party'),
@@ -120,11 +117,12 @@ const AddedToGroup = z
 export const NewAcquisition = z.strictObject({
   ...shared,
   kind: z.enum(acquisitionKinds).describe('How they came'),
-  lines: z
-    .array(z.discriminatedUnion('record', [NewAnimal, AddedToGroup]))
-    .min(1, 'Name at least one animal or group')
-    .max(50)
-    .describe('The animals and groups'),
+  lines: noneTwice(
+    z
+      .array(z.discriminatedUnion('record', [NewAnimal, AddedToGroup]))
+      .min(1, 'Name at least one animal or group')
+      .max(50),
+  ).describe('The animals and groups'),
 })
 export type NewAcquisition = z.infer<typeof NewAcquisition>
 
@@ -132,18 +130,19 @@ export type NewAcquisition = z.infer<typeof NewAcquisition>
 export const NewDisposition = z.strictObject({
   ...shared,
   kind: z.enum(dispositionKinds).describe('How they left'),
-  lines: z
-    .array(
-      z
-        .strictObject({
-          id: RecordId.describe('Id of the line'),
-          animalId: RecordId.describe('The animal or group'),
-          count: AnimalCount.describe('Animals that left; 1 for an individual'),
-        })
-        .describe('Animals that left'),
-    )
-    .min(1, 'Name at least one animal or group')
-    .max(50)
-    .describe('The animals and groups'),
+  lines: noneTwice(
+    z
+      .array(
+        z
+          .strictObject({
+            id: RecordId.describe('Id of the line'),
+            animalId: RecordId.describe('The animal or group'),
+            count: AnimalCount.describe('Animals that left; 1 for an individual'),
+          })
+          .describe('Animals that left'),
+      )
+      .min(1, 'Name at least one animal or group')
+      .max(50),
+  ).describe('The animals and groups'),
 })
 export type NewDisposition = z.infer<typeof NewDisposition>

@@ -6,17 +6,8 @@ import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { contract } from './contract.ts'
 import { AttachedDocument, UploadFields } from './documents.contract.ts'
 import { PermitKindName, PermitMarkName } from './permits.contract.ts'
-import { Instant, listQuery, LocalDate, May, page, Reason, RecordId } from './primitives.ts'
-import {
-  Guarded,
-  HumanNumber,
-  Named,
-  PartialDateText,
-  Period,
-  Stage,
-  TimeOfDay,
-  Voided,
-} from './register-primitives.ts'
+import { Instant, listQuery, LocalDate, May, page, PartialDate, Reason, RecordId } from './primitives.ts'
+import { Guarded, HumanNumber, Named, Period, Stage, TimeOfDay, Voided } from './register-primitives.ts'
 
 const Way = z.enum(['in', 'out']).describe('Into the collection, or out of it')
 const KindName = z.enum(transactionKindNames).describe('Kind of transaction in the trade’s terms')
@@ -47,7 +38,7 @@ export const TransactionRow = z.object({
   number: HumanNumber,
   way: Way,
   kind: KindName,
-  on: PartialDateText,
+  on: PartialDate,
   counterparty: z.string().nullable().describe('The other party'),
   reference: z.string().nullable().describe('Number on their paper'),
   animals: z
@@ -75,7 +66,7 @@ export const Transaction = z.object({
   way: Way,
   kind: KindName,
   stage: Stage,
-  on: PartialDateText,
+  on: PartialDate,
   time: TimeOfDay.nullable().describe('Local time of day, where it is known'),
   at: Instant.describe('Where it stands in the ledgers'),
   counterparty: Named.nullable().describe('The other party'),

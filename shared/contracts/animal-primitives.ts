@@ -9,9 +9,8 @@ import {
   lifeStages,
   sexes,
 } from '../domain/animals/description.ts'
-import { isPartialDate } from '../domain/register/partial-date.ts'
 import { quarantineKindNames, taxonGroupNames } from '../domain/taxa/taxon-group.ts'
-import { Instant, LocalDate, RecordId } from './primitives.ts'
+import { Instant, LocalDate, PartialDate, RecordId } from './primitives.ts'
 
 export const AccessionNumber = z.string().trim().min(1).max(60).describe('Accession number of the registrar')
 export const TaxonGroupName = z.enum(taxonGroupNames).describe('Group that the rules of treatment know')
@@ -28,12 +27,6 @@ export const CarcassPlaceName = z.enum(carcassPlaces).describe('What became of t
 export const Note = z.string().trim().max(2000).describe('Remarks, in words')
 export const WholeCount = z.int().min(1).max(10_000_000).describe('Whole animals, 1 or more')
 export const HappenedAt = Instant.describe('When it happened; at most 5 minutes ahead of the server')
-
-/** A date as exactly as it is known. */
-export const PartialDate = z
-  .string()
-  .refine(isPartialDate, 'Give a year, a month or a day that the calendar has: 2026, 2026-03 or 2026-03-14')
-  .describe('Date as exactly as it is known: YYYY, YYYY-MM or YYYY-MM-DD')
 
 export const Birth = z
   .strictObject({

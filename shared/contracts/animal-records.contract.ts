@@ -190,7 +190,14 @@ export const adjustCount = contract({
     happenedAt: HappenedAt,
   }),
   reply: { 201: Animal },
-  problems: ['not-found', 'in-the-future', 'not-a-group', 'count-too-small', 'id-already-used'],
+  problems: [
+    'not-found',
+    'in-the-future',
+    'not-a-group',
+    'not-here-then',
+    'count-too-small',
+    'id-already-used',
+  ],
   idempotent: 'by-record-id',
 })
 

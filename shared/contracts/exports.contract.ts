@@ -4,8 +4,8 @@ import { exportFormats } from '../domain/register/export-formats.ts'
 import { contract } from './contract.ts'
 import { AttachedDocument } from './documents.contract.ts'
 import { PermitKindName, PermitMarkName } from './permits.contract.ts'
-import { Instant, listQuery, LocalDate, May, page, Reason, RecordId } from './primitives.ts'
-import { HumanNumber, PartialDateText, Period, Voided } from './register-primitives.ts'
+import { Instant, listQuery, LocalDate, May, page, PartialDate, Reason, RecordId } from './primitives.ts'
+import { HumanNumber, Period, Voided } from './register-primitives.ts'
 
 const ExportFormatName = z.enum(exportFormats).describe('Form of the file')
 const Place = z
@@ -29,7 +29,7 @@ export type HistoryPermit = z.infer<typeof HistoryPermit>
 export const HistoryEvent = z.object({
   eventId: z.string().describe('Id of the line in the ledger'),
   kind: z.string().describe('What happened: a kind of the count ledger, move, counted or estimated'),
-  on: PartialDateText.describe('When, as exactly as it is known'),
+  on: PartialDate.describe('When, as exactly as it is known'),
   at: Instant.describe('Where it stands in the ledgers'),
   exact: z.boolean().describe('The time of day is known'),
   delta: z.int().describe('Whole animals gained or lost; of a voided line, what it had said'),

@@ -3,7 +3,7 @@ import { breathings, feedings, signCodes, skins } from '../domain/observations/o
 import { AccessionNumber, WholeCount } from './animal-primitives.ts'
 import { contract } from './contract.ts'
 import { NoticeState } from './notices.contract.ts'
-import { Instant, LocalDate, Reason, RecordId } from './primitives.ts'
+import { Instant, LocalDate, noneTwice, Reason, RecordId } from './primitives.ts'
 import { CaseNumber } from './quarantine-primitives.ts'
 import { actAddresses } from './today.addresses.ts'
 
@@ -25,7 +25,7 @@ const said = {
   feeding: z.enum(feedings).nullable().describe('How many ate; null when nothing was said'),
   breathing: z.enum(breathings).nullable().describe('Breathing; null when nothing was said'),
   skin: z.enum(skins).nullable().describe('Skin and fins; null when nothing was said'),
-  signs: z.array(z.enum(signCodes)).max(signCodes.length).describe('Signs with a code'),
+  signs: noneTwice(z.array(z.enum(signCodes)).max(signCodes.length)).describe('Signs with a code'),
   words: z.string().trim().max(2000).nullable().describe('In the observer’s own words'),
   count: CountSaid,
   foundDead: HowMany.nullable().describe('Bodies found; null when nothing was said, which is not 0'),
@@ -84,16 +84,17 @@ export const recordObservation = contract({
     happenedAt: Instant.describe('When it was made, by the clock of the device'),
     enclosure: z.string().max(60).describe('Code of the enclosure'),
     ...said,
-    deaths: z
-      .array(
-        z.strictObject({
-          id: RecordId.describe('Id of the death'),
-          accession: AccessionNumber,
-          count: WholeCount,
-        }),
-      )
-      .max(100)
-      .describe('Whose the bodies are, as far as anybody could say'),
+    deaths: noneTwice(
+      z
+        .array(
+          z.strictObject({
+            id: RecordId.describe('Id of the death'),
+            accession: AccessionNumber,
+            count: WholeCount,
+          }),
+        )
+        .max(100),
+    ).describe('Whose the bodies are, as far as anybody could say'),
     noticeId: RecordId.optional(),
   }),
   reply: { 201: Observation },
@@ -163,16 +164,17 @@ export const nameBodies = contract({
   params: z.strictObject({ id: RecordId }),
   body: z.strictObject({
     id: RecordId,
-    deaths: z
-      .array(
-        z.strictObject({
-          id: RecordId.describe('Id of the death'),
-          accession: AccessionNumber,
-          count: WholeCount,
-        }),
-      )
-      .max(100)
-      .describe('Whose they are; each goes into the ledger of its animal'),
+    deaths: noneTwice(
+      z
+        .array(
+          z.strictObject({
+            id: RecordId.describe('Id of the death'),
+            accession: AccessionNumber,
+            count: WholeCount,
+          }),
+        )
+        .max(100),
+    ).describe('Whose they are; each goes into the ledger of its animal'),
     reason: Reason.optional().describe('Why the rest cannot be named; needed where any is left'),
   }),
   reply: { 201: Observation },

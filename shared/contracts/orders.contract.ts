@@ -2,7 +2,17 @@ import { z } from 'zod'
 import { agentCodes } from '../domain/formulary/agent.ts'
 import { concentrationBases } from '../domain/units/basis.ts'
 import { contract } from './contract.ts'
-import { EnteredQuantity, Instant, listQuery, May, page, Reason, RecordId, Version } from './primitives.ts'
+import {
+  EnteredQuantity,
+  Instant,
+  listQuery,
+  May,
+  noneTwice,
+  page,
+  Reason,
+  RecordId,
+  Version,
+} from './primitives.ts'
 import { SignatureBlock } from './signing.contract.ts'
 import { actAddresses } from './today.addresses.ts'
 
@@ -23,10 +33,9 @@ export const Stated = z
     hasBloom: z.boolean().nullable().describe('There is a heavy bloom of algae'),
     hasPlantsOrAlgae: z.boolean().nullable().describe('Plants or algae are on show in this water'),
     lights: z.enum(['full', 'dimmed', 'off']).nullable().describe('Lights over the water'),
-    experienceWith: z
-      .array(z.string().max(200))
-      .max(50)
-      .describe('Taxa for which the veterinarian declares earlier experience with this drug here'),
+    experienceWith: noneTwice(z.array(z.string().max(200)).max(50)).describe(
+      'Taxa for which the veterinarian declares earlier experience with this drug here',
+    ),
   })
   .describe('Facts that no ledger holds, stated on the form')
 
@@ -34,7 +43,7 @@ export const Stated = z
 export const BathOrderFields = z
   .strictObject({
     enclosureId: RecordId.describe('Enclosure whose water is treated'),
-    animalIds: z.array(RecordId).max(200).describe('Animals and groups that are treated'),
+    animalIds: noneTwice(z.array(RecordId).max(200)).describe('Animals and groups that are treated'),
     productId: RecordId.nullable().describe('Product'),
     lotId: RecordId.nullable().describe('Lot, where one is chosen already'),
     doseLineId: RecordId.nullable().describe('Dose line of the formulary that the target is taken from'),

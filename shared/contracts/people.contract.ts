@@ -5,6 +5,7 @@ import {
   Instant,
   listQuery,
   LocalDate,
+  noneTwice,
   page,
   PersonName,
   Reason,
@@ -87,7 +88,7 @@ export const enterPerson = contract({
     id: RecordId,
     email: Email,
     printedName: PersonName,
-    roles: z.array(RoleName).min(1, 'Choose at least one role').describe('Roles to hold'),
+    roles: noneTwice(z.array(RoleName).min(1, 'Choose at least one role')).describe('Roles to hold'),
   }),
   reply: {
     201: Person.extend({
@@ -109,7 +110,7 @@ export const correctPerson = contract({
     expectedVersion: Version,
     email: Email,
     printedName: PersonName,
-    roles: z.array(RoleName).describe('All roles to hold from now on'),
+    roles: noneTwice(z.array(RoleName)).describe('All roles to hold from now on'),
     active: z.boolean().describe('May sign in'),
   }),
   reply: { 200: Person },

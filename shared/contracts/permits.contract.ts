@@ -3,14 +3,23 @@ import { permitKinds, purposeCodes } from '../domain/register/permit-kinds.ts'
 import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { contract } from './contract.ts'
 import { AttachedDocument, UploadFields } from './documents.contract.ts'
-import { Instant, listQuery, LocalDate, May, page, Reason, RecordId } from './primitives.ts'
+import {
+  Instant,
+  listQuery,
+  LocalDate,
+  May,
+  noneTwice,
+  page,
+  PartialDate,
+  Reason,
+  RecordId,
+} from './primitives.ts'
 import {
   AnimalCount,
   Guarded,
   HumanNumber,
   Named,
   optionalWords,
-  PartialDateText,
   Voided,
   words,
 } from './register-primitives.ts'
@@ -27,7 +36,7 @@ export const PermitUse = z.object({
   id: RecordId,
   transaction: HumanNumber.describe('Number of the transaction'),
   kind: z.string().describe('Kind of the transaction'),
-  on: PartialDateText,
+  on: PartialDate,
   accession: z.string().describe('Accession number of the animal or group'),
   commonName: z.string().describe('Common name of its taxon'),
   quantity: AnimalCount.describe('Whole animals taken under the permit'),
@@ -139,7 +148,7 @@ export const NewPermit = z.strictObject({
   quantityAllowed: AnimalCount.nullish().describe(
     'Whole animals it allows; absent where no number is stated',
   ),
-  taxonIds: z.array(RecordId).max(50).describe('Taxa it is restricted to; empty: none is named'),
+  taxonIds: noneTwice(z.array(RecordId).max(50)).describe('Taxa it is restricted to; empty: none is named'),
   counterpartyId: RecordId.nullish().describe('Party it was given to or names'),
   purposeCode: z.enum(purposeCodes).nullish().describe('Letter of the purpose'),
   conditions: optionalWords(4000, 'Conditions in words'),

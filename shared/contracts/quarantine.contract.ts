@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
-import { Instant, LocalDate, May, RecordId, listQuery } from './primitives.ts'
+import { Instant, listQuery, LocalDate, May, noneTwice, RecordId } from './primitives.ts'
 import { AccessionNumber } from './animal-primitives.ts'
 import { Animals, CaseNames, CaseNumber, CaseRow, HappenedAt, Unmet } from './quarantine-primitives.ts'
 import { SignatureBlock } from './signing.contract.ts'
@@ -192,19 +192,21 @@ export const openCase = contract({
     id: RecordId,
     name: z.string().trim().min(1).max(120).optional().describe('Name of the case; the taxon unless told'),
     protocolVersionId: RecordId.describe('Version of the protocol'),
-    members: z
-      .array(
-        z.strictObject({
-          id: RecordId,
-          accession: AccessionNumber,
-          happenedAt: HappenedAt.describe(
-            'When it came in; the beginning of its stay unless told',
-          ).optional(),
-        }),
-      )
-      .min(1, 'Choose at least one animal or group')
-      .max(200)
-      .describe('The batch so far'),
+    members: noneTwice(
+      z
+        .array(
+          z.strictObject({
+            id: RecordId,
+            accession: AccessionNumber,
+            happenedAt: HappenedAt.describe(
+              'When it came in; the beginning of its stay unless told',
+            ).optional(),
+          }),
+        )
+        .min(1, 'Choose at least one animal or group')
+        .max(200),
+      ['accession'],
+    ).describe('The batch so far'),
     happenedAt: HappenedAt,
   }),
   reply: { 201: CaseDetail },

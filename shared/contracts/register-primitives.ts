@@ -1,13 +1,5 @@
 import { z } from 'zod'
-import { isPartialDate } from '../domain/register/partial-date.ts'
 import { Instant, LocalDate, RecordId } from './primitives.ts'
-
-/** A date, a month or a year: how it is written says how exactly it is known. */
-export const PartialDateText = z
-  .string()
-  .trim()
-  .refine(isPartialDate, 'Type a date, a month or a year, for example 2026-03-14, 2026-03 or 2026')
-  .describe('A date as exactly as it is known: YYYY-MM-DD, YYYY-MM or YYYY')
 
 export const TimeOfDay = z
   .string()

@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { lifeSupportKinds } from '../domain/places/life-support-kind.ts'
 import { contract } from './contract.ts'
 import { PlaceCode, PlaceName, WaterBody } from './enclosures.contract.ts'
-import { Instant, RecordId, Version } from './primitives.ts'
+import { Instant, noneTwice, RecordId, Version } from './primitives.ts'
 import { HappenedAt, Note } from './water.contract.ts'
 import { ConnectionNow, Isolation, LifeSupportNow } from './water-facts.ts'
 
@@ -143,7 +143,9 @@ export const recordIsolation = contract({
   summary: 'Record that part of a connected water was shut off for a treatment',
   body: z.strictObject({
     id: RecordId,
-    waterBodyIds: z.array(RecordId).min(1, 'Name at least one body').max(50).describe('Bodies shut off'),
+    waterBodyIds: noneTwice(z.array(RecordId).min(1, 'Name at least one body').max(50)).describe(
+      'Bodies shut off',
+    ),
     happenedAt: HappenedAt,
     note: Note,
   }),

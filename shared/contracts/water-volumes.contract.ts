@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
 import { enclosureParams } from './enclosures.contract.ts'
-import { LocalDate, Reason, RecordId } from './primitives.ts'
+import { LocalDate, noneTwice, Reason, RecordId } from './primitives.ts'
 import { VolumeSheetBody } from './volume-sheet.ts'
 import { HappenedAt, Note } from './water.contract.ts'
 import { Volume } from './water-facts.ts'
@@ -31,11 +31,9 @@ export const determineVolume = contract({
     happenedAt: HappenedAt.describe(
       'When it was measured; the valve state of that instant is what it holds for',
     ),
-    waterBodyIds: z
-      .array(RecordId)
-      .min(1, 'Name at least one body')
-      .max(50)
-      .describe('Bodies it covers: all that were joined then, or those of an isolation'),
+    waterBodyIds: noneTwice(z.array(RecordId).min(1, 'Name at least one body').max(50)).describe(
+      'Bodies it covers: all that were joined then, or those of an isolation',
+    ),
     isolationId: RecordId.nullable()
       .optional()
       .describe('Needed when it covers less than the connected water'),

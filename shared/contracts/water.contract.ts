@@ -3,7 +3,7 @@ import { waterEventKinds } from '../domain/places/water-event-kind.ts'
 import { phScales } from '../domain/readings/parameters.ts'
 import { contract } from './contract.ts'
 import { Enclosure, enclosureParams, WaterBody } from './enclosures.contract.ts'
-import { EnteredQuantity, Instant, listQuery, May, page, Reason, RecordId } from './primitives.ts'
+import { EnteredQuantity, Instant, listQuery, May, noneTwice, page, Reason, RecordId } from './primitives.ts'
 import {
   ConnectionNow,
   Isolation,
@@ -182,20 +182,22 @@ export const recordReadings = contract({
   body: z.strictObject({
     waterBodyId: RecordId.describe('Where it was measured'),
     happenedAt: HappenedAt,
-    readings: z
-      .array(
-        z.strictObject({
-          id: RecordId,
-          parameter: Parameter,
-          value: EnteredQuantity.describe('As the instrument gave it'),
-          below: z.boolean().optional().describe('The true value lies below the figure'),
-          scale: z.enum(phScales).nullable().optional().describe('Scale of a pH, needed there'),
-          instrument: z.string().trim().min(1).max(120).nullable().optional().describe('Instrument or kit'),
-          note: Note,
-        }),
-      )
-      .min(1, 'Enter at least one reading')
-      .max(40)
+    readings: noneTwice(
+      z
+        .array(
+          z.strictObject({
+            id: RecordId,
+            parameter: Parameter,
+            value: EnteredQuantity.describe('As the instrument gave it'),
+            below: z.boolean().optional().describe('The true value lies below the figure'),
+            scale: z.enum(phScales).nullable().optional().describe('Scale of a pH, needed there'),
+            instrument: z.string().trim().min(1).max(120).nullable().optional().describe('Instrument or kit'),
+            note: Note,
+          }),
+        )
+        .min(1, 'Enter at least one reading')
+        .max(40),
+    )
       .refine(
         (list) => new Set(list.map((reading) => reading.id)).size === list.length,
         'Each reading needs an id of its own',

@@ -54,6 +54,13 @@ export const animalRefusals = defineMessages({
   blankMark: 'Type the mark as read: letters or digits.',
   belongsToDeath: 'This line was written with a death. Strike out the death instead.',
   belongsToTransfer: 'This line is half of a split or merge. Merge the animals back instead.',
+  bornAhead: 'This day has not come yet. Correct the date of birth.',
+  bornAfterArrival: (p: { accession: string; on: string }) =>
+    `${p.accession} came on ${p.on}. It was not born after that; correct the date of birth, or choose hatched if it came as an egg.`,
+  restsOn: (p: { accession: string; what: string }) =>
+    `More rests on ${p.accession} since it came: ${p.what}. Have it struck out of there first by a veterinarian, then void the transaction. What is signed stands: then the transaction stands too, and a further one says what is right.`,
+  inCase: (p: { number: string }) => `the quarantine case ${p.number}`,
+  inOrder: (p: { number: string }) => `the treatment order ${p.number}`,
   laterRecords: (p: { accession: string }) =>
     `More is recorded of ${p.accession} since it came. Strike that out first, then void the transaction.`,
   belongsToRegister:

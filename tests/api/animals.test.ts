@@ -327,6 +327,60 @@ describe('striking out', () => {
   })
 })
 
+describe('dates and lists that cannot be', () => {
+  it('are refused in plain words wherever they are entered, not answered with a failure', async () => {
+    const school = await aGroup(api, { taxonId, enclosureId: kelp.id, count: 12 })
+    const registrar = await api.as('registrar')
+    for (const year of ['0000', '0206', '1200', '9999']) {
+      const happenedAt = `${year}-11-30T14:00:00Z`
+      const death = { id: api.nextId(), kind: 'found-dead', count: 1, happenedAt }
+      for (const reply of [
+        await (await api.as('keeper')).agent.post(`${school.url}/deaths`).send(death),
+        await registrar.agent.get(`/api/enclosures/${kelp.code}/inhabitants?at=${happenedAt}`),
+      ]) {
+        expect(reply.status, year).toBe(422)
+        expect(reply.body.errors[0].detail).toBe('Check the year: it has to lie between 1900 and 2199')
+      }
+    }
+    const adjust = (happenedAt: string) =>
+      registrar.agent
+        .post(`${school.url}/adjustments`)
+        .send({ id: api.nextId(), delta: 3, reason: 'counted in the dark', happenedAt })
+    const early = await adjust('2026-10-01T12:00:00Z')
+    expect([early.status, early.body.code]).toEqual([409, 'not-here-then'])
+    expect((await adjust(monday)).status).toBe(201)
+  })
+
+  it('like a birth after arrival, or ahead of today; an egg may hatch here', async () => {
+    const ray = await anAnimal(api, { taxonId, enclosureId: kelp.id })
+    const { agent } = await api.as('registrar')
+    let version = 1
+    const describe = async (kind: string, date: string) => {
+      const reply = await agent.put(`${ray.url}/description`).send({
+        expectedVersion: version,
+        taxonId,
+        name: null,
+        sex: 'unknown',
+        stage: 'juvenile',
+        birth: { kind, date, approximate: false },
+        happenedAt: monday,
+      })
+      if (reply.status === 200) version = reply.body.version as number
+      return reply
+    }
+    for (const [kind, date] of [
+      ['born', '2026-11-20'],
+      ['hatched', '2027-01'],
+      ['born', '1200'],
+    ] as const) {
+      const reply = await describe(kind, date)
+      expect([reply.status, reply.body.errors[0].pointer], date).toEqual([422, '/birth/date'])
+    }
+    expect((await describe('hatched', '2026-11-20')).status).toBe(200)
+    expect((await describe('born', '2026-11')).status).toBe(200)
+  })
+})
+
 describe('accession', () => {
   it('draws a number once, however often the acquisition is sent', async () => {
     const id = api.nextId()

@@ -8,7 +8,33 @@ import { problemTitles } from '../../shared/messages/problems.ts'
 import { apiDocument } from '../../server/platform/http/api-document.ts'
 import { openApiDocument } from '../../server/platform/http/openapi.ts'
 
-type Schema = { description?: string; properties?: Record<string, Schema>; items?: Schema; anyOf?: Schema[] }
+interface Schema {
+  description?: string
+  type?: string
+  format?: string
+  enum?: unknown[]
+  uniqueItems?: boolean
+  properties?: Record<string, Schema>
+  items?: Schema
+  anyOf?: Schema[]
+  oneOf?: Schema[]
+}
+
+/** Lists of records, ids or fixed words in which one may stand twice. */
+function listsThatTakeTwice(schema: Schema, at: string): string[] {
+  const forms = (one: Schema | undefined) => (one ? [one, ...(one.anyOf ?? []), ...(one.oneOf ?? [])] : [])
+  return forms(schema).flatMap((form) => {
+    const items = forms(form.items)
+    const tells = items.some((one) => one.properties?.['id'] ?? one.enum ?? one.format === 'uuid')
+    return [
+      ...(tells && form.uniqueItems !== true ? [at] : []),
+      ...items.flatMap((one) => listsThatTakeTwice(one, `${at}[]`)),
+      ...Object.entries(form.properties ?? {}).flatMap(([name, one]) =>
+        listsThatTakeTwice(one, `${at}.${name}`),
+      ),
+    ]
+  })
+}
 
 /** Places in a schema that say nothing about what they mean. */
 function undescribed(schema: Schema, at: string): string[] {
@@ -42,6 +68,15 @@ describe('contracts', () => {
       const json = z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any' }) as Schema
       expect(undescribed(json, of.id)).toEqual([])
     }
+  })
+
+  it('take no record, id or fixed word twice in one list', () => {
+    const open = allContracts.flatMap(({ id, body }) =>
+      body
+        ? listsThatTakeTwice(z.toJSONSchema(body, { io: 'input', unrepresentable: 'any' }) as Schema, id)
+        : [],
+    )
+    expect(open).toEqual([])
   })
 
   it('answer unknown fields with an error, not with silence', () => {

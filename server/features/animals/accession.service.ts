@@ -12,6 +12,7 @@ import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { Animal } from './animal.entity.ts'
 import * as animals from './animals.repository.ts'
+import { readDependents } from './dependents.reads.ts'
 import { birthColumns } from './identify.service.ts'
 import type { Birth, Identify } from './identify.service.ts'
 import * as repository from './ledgers.repository.ts'
@@ -333,7 +334,7 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
      * Strikes out an accession as a whole, first line, first count and arrival: the animal never came. Its number is
      * not used again.
      *
-     * @refuses later-records (anything else is recorded of its count or place)
+     * @refuses later-records (anything else is recorded of its count or place, or a case or an order rests on it)
      */
     async strikeAccession(tx: Tx, given: { countEntryId: string; reason: string }): Promise<void> {
       const entry = await repository.findEntry(tx, given.countEntryId)
@@ -346,6 +347,16 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
       if (entries.length > 1 || live.length !== 1 || !arrival)
         throw new Problem('later-records', {
           detail: animalRefusals.laterRecords({ accession: animal.accession }),
+        })
+      const dependents = await readDependents(tx.manager, animal.id)
+      if (dependents.length > 0)
+        throw new Problem('later-records', {
+          detail: animalRefusals.restsOn({
+            accession: animal.accession,
+            what: dependents
+              .map(({ kind, number }) => animalRefusals[kind === 'case' ? 'inCase' : 'inOrder']({ number }))
+              .join(', '),
+          }),
         })
       const { reason } = given
       await repository.strike(tx, { id: parts.ids.next(), what: 'countEntryId', rowId: entry.id, reason })

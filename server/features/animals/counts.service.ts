@@ -46,6 +46,23 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
       })
   }
 
+  /** Before it came there was no count that could be wrong. What left again may still be corrected. */
+  const needArrived = async (tx: Tx, animal: Animal, times: FactTimes) => {
+    const [arrival] = await repository.readLiveMoves(tx, animal.id)
+    if (arrival && new Date(arrival.at) <= times.happenedAt) return
+    const at = sayInstant(times.happenedAt, await facility.zone(tx))
+    throw new Problem('not-here-then', {
+      detail: animalRefusals.notInTheHouse({ accession: animal.accession, at }),
+      errors: [
+        {
+          pointer: '/happenedAt',
+          detail: animalRefusals.notInTheHouse({ accession: animal.accession, at }),
+          code: 'not-here-then',
+        },
+      ],
+    })
+  }
+
   /** Opens a discrepancy when a count or estimate does not agree with the ledger of that moment. */
   async function compareStatement(tx: Tx, animal: Animal, given: CountRequest, times: FactTimes) {
     const known = await ledgers.countAt(tx, animal.id, times.happenedAt)
@@ -244,6 +261,7 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
         const content = { id, animalId: animal.id, delta, reason, happenedAt: times.happenedAt }
         if (await isRepeated(tx, CountEntryRow, content)) return
         needGroup(animal)
+        await needArrived(tx, animal, times)
         const posted = await ledgers.post(tx, animal, { id, kind: 'count-adjustment', delta, reason }, times)
         if (posted.excessCount > 0)
           throw refuseField(

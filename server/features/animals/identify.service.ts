@@ -1,5 +1,7 @@
 import type { BirthKind, IdentifierKind, LifeStage, Sex } from '../../../shared/domain/animals/description.ts'
 import { identifierKey, readTransponder } from '../../../shared/domain/animals/read-transponder.ts'
+import { readPartialDate } from '../../../shared/domain/register/partial-date.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
 import { isRepeated } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
@@ -9,6 +11,7 @@ import type { FactTimes } from '../facility/index.ts'
 import type { Animal } from './animal.entity.ts'
 import { Identifier } from './animal.entity.ts'
 import * as repository from './animals.repository.ts'
+import { readLiveMoves } from './ledgers.repository.ts'
 import { subjectOf } from './moves.service.ts'
 import type { MoveParts, Moves } from './moves.service.ts'
 import { refuseField } from './refuse.ts'
@@ -100,6 +103,22 @@ export function createIdentify(parts: MoveParts & { moves: Moves }) {
       })
   }
 
+  /** Nothing is born ahead of today, nor after it came; what came as an egg may hatch later. */
+  async function refuseImpossibleBirth(tx: Tx, animal: Animal, birth: Birth): Promise<void> {
+    const read = readPartialDate(birth.date)
+    if (!read.ok) return
+    const { first } = read.value
+    if (first > facilityDateOf(tx.at.toISOString(), await facility.zone(tx)))
+      throw refuseField('bad-input', '/birth/date', animalRefusals.bornAhead)
+    const [arrival] = await readLiveMoves(tx, animal.id)
+    if (birth.kind !== 'hatched' && arrival && first > arrival.happenedOn)
+      throw refuseField(
+        'bad-input',
+        '/birth/date',
+        animalRefusals.bornAfterArrival({ accession: animal.accession, on: arrival.happenedOn }),
+      )
+  }
+
   return {
     writeIdentifier,
 
@@ -114,6 +133,7 @@ export function createIdentify(parts: MoveParts & { moves: Moves }) {
         const times = await facility.timesOf(tx, given.happenedAt)
         if (!(await findTaxon(tx, given.taxonId)))
           throw refuseField('not-found', '/taxonId', animalRefusals.noSuchTaxon)
+        if (given.birth) await refuseImpossibleBirth(tx, animal, given.birth)
         const { taxonId, name, sex, stage } = given
         await repository.insertDescription(tx, {
           id: parts.ids.next(),

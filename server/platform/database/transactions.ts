@@ -126,6 +126,8 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
           if (error instanceof Replayed) return error.result as never
           const driver = driverError(error)
           if (isRetryable(driver) && attempt < attempts) continue
+          // The id stands twice in one request, which no retry changes
+          if (driver.code === '23505' && isRetryable(driver)) throw new Problem('id-already-used')
           if (driver.code === '55P03' || isRetryable(driver)) throw new Problem('busy')
           const problem = driver.constraint ? problemFromConstraint(driver.constraint) : null
           throw problem ?? error
