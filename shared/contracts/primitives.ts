@@ -16,12 +16,16 @@ function outsideYears(first: number): string {
 export const RecordId = z.uuid({ version: 'v7' }).describe('UUIDv7 of the record')
 /** An instant with its offset, for example 2026-12-01T14:20:00-05:00 */
 export const Instant = z.iso
-  .datetime({ offset: true, abort: true })
+  .datetime({
+    offset: true,
+    abort: true,
+    error: 'Give a day and a time with its offset, for example 2026-12-01T14:20:00-05:00',
+  })
   .refine((text) => isInPlausibleYear(text), outsideYears(firstPlausibleYear))
   .describe('An instant, ISO 8601 with offset')
 /** A calendar date at the facility. */
 export const LocalDate = z.iso
-  .date({ abort: true })
+  .date({ abort: true, error: 'Give a day that the calendar has, for example 2026-12-01' })
   .refine((text) => isInPlausibleYear(text), outsideYears(firstPlausibleYear))
   .describe('A calendar date at the facility, YYYY-MM-DD')
 /** A date as exactly as it is known: how it is written says how exact it is. */
