@@ -38,7 +38,7 @@ export const getCertificate = contract({
   id: 'getCertificate',
   method: 'get',
   path: '/cases/:number/certificate.pdf',
-  action: 'collection.read',
+  action: 'register.read',
   summary: 'The clearance certificate as it was signed',
   params: caseParams,
   reply: { 200: z.string().describe('PDF') },

@@ -26,7 +26,15 @@ import {
 
 export const PermitKindName = z.enum(permitKinds).describe('What the permit allows')
 export const PermitMarkName = z
-  .enum(['over-quantity', 'not-yet-valid', 'expired', 'other-taxon', 'voided'])
+  .enum([
+    'over-quantity',
+    'not-yet-valid',
+    'expired',
+    'other-taxon',
+    'voided',
+    'fewer-than-animals',
+    'more-than-animals',
+  ])
   .describe('In which respect the permit does not cover a use')
 const PermitStateName = z
   .enum(['void', 'not-yet', 'expired', 'runs-out', 'valid'])

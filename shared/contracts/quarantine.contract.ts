@@ -85,6 +85,16 @@ export const CaseDetail = CaseRow.extend({
     )
     .describe('Reasons to wait longer'),
   unmet: z.array(Unmet).describe('What stands between the case and clearance'),
+  decisionsDue: z
+    .array(
+      z.object({
+        code: z
+          .enum(['exposure', 'recall', 'repeat-sample', 'positive-untreated'])
+          .describe('What is to be decided or done'),
+        eventId: z.string().describe('Event that it comes from'),
+      }),
+    )
+    .describe('What waits for a decision of a veterinarian, or for whoever takes samples'),
   openDiscrepancies: z
     .int()
     .describe('Discrepancies of the batch that nobody has explained; they stop clearance'),

@@ -1,3 +1,4 @@
+import { tooSoonAfterMasking } from './quarantine.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 /** Words of a signed clearance: its meaning, and the certificate on paper. */
@@ -55,7 +56,8 @@ export const clearanceWords = defineMessages({
   metOn: (p: { on: string }) => `met on ${p.on}`,
   met: 'met',
   notMet: 'not met',
-  negatives: (p: { count: number; wanted: number }) => `, ${String(p.count)} of ${String(p.wanted)}`,
+  negatives: (p: { count: number; wanted: number; met: boolean }) =>
+    `, ${String(p.count)} of ${String(p.wanted)}${p.met || p.count < p.wanted ? '' : tooSoonAfterMasking}`,
   clockHeading: 'How the clock ran',
   date: 'Date',
   what: 'What happened, and what it did',

@@ -46,17 +46,22 @@ const party = (name: string | null) => name ?? 'a party not named'
 
 /** What a port of the passage says: one sentence for each kind of event. */
 export const portTitles = defineMessages({
-  'wild-collection': () => 'Collected and received here',
+  'wild-collection': (p: { party: string | null }) =>
+    p.party === null ? 'Collected and received here' : `Collected by ${p.party} and received here`,
   purchase: (p: { party: string | null }) => `Bought from ${party(p.party)}`,
   'donation-in': (p: { party: string | null }) => `Given by ${party(p.party)}`,
   'birth-or-hatch': () => 'Born or hatched here',
   propagation: () => 'Propagated here',
   'loan-in': (p: { party: string | null }) => `On loan from ${party(p.party)}`,
   'transfer-in': (p: { party: string | null }) => `Transferred from ${party(p.party)}`,
-  rescue: () => 'Rescued or stranded, taken in',
+  rescue: (p: { party: string | null }) =>
+    p.party === null
+      ? 'Rescued or stranded, taken in'
+      : `Rescued or stranded, brought by ${p.party}, taken in`,
   confiscation: (p: { party: string | null }) => `Confiscated, placed here by ${party(p.party)}`,
   'exchange-in': (p: { party: string | null }) => `Exchanged with ${party(p.party)}, received`,
-  found: () => 'Found, origin not known',
+  found: (p: { party: string | null }) =>
+    p.party === null ? 'Found, origin not known' : `Found, brought by ${p.party}, origin not known`,
   'split-in': (p: { other: string | null }) => `Taken out of ${p.other ?? 'another group'}`,
   'merge-in': (p: { other: string | null }) => `Joined by ${p.other ?? 'another group'}`,
   'transfer-out': (p: { party: string | null }) => `Transferred to ${party(p.party)}`,
@@ -65,7 +70,8 @@ export const portTitles = defineMessages({
   sale: (p: { party: string | null }) => `Sold to ${party(p.party)}`,
   'donation-out': (p: { party: string | null }) => `Given to ${party(p.party)}`,
   'exchange-out': (p: { party: string | null }) => `Exchanged with ${party(p.party)}, sent`,
-  release: () => 'Released to the wild',
+  release: (p: { party: string | null }) =>
+    p.party === null ? 'Released to the wild' : `Released to the wild with ${p.party}`,
   death: () => 'Death',
   euthanasia: () => 'Euthanasia',
   escape: () => 'Escaped',

@@ -10,6 +10,8 @@ export interface PermitFacts {
   remaining: number
   /** Whole animals of the use. */
   wanted: number
+  /** Whole animals alive in the line that it is used for. */
+  alive: number
 }
 
 const animals = (count: number) => counted(count, 'animal', 'animals')
@@ -24,6 +26,10 @@ export const permitSentences = defineMessages({
   expired: (p: PermitFacts) => `Permit ${p.permit} ended on ${p.validUntil}.`,
   'other-taxon': (p: PermitFacts) => `Permit ${p.permit} does not name this taxon.`,
   voided: (p: PermitFacts) => `Permit ${p.permit} is void.`,
+  'fewer-than-animals': (p: PermitFacts) =>
+    `${animals(p.alive)} are in the line, but fewer are taken under permit ${p.permit} and others of its kind. Take all of them, or name the permit for the rest.`,
+  'more-than-animals': (p: PermitFacts) =>
+    `Only ${animals(p.alive)} are in the line, but more are taken under permit ${p.permit} and others of its kind. Correct the number.`,
   ifItHappened: 'If it has already happened, say so: then it is kept and marked.',
   lastDayFirst: 'The last day has to be on or after the first day.',
   numberTaken:

@@ -1,4 +1,5 @@
 import type { CaseDetail } from '../contracts/quarantine.contract.ts'
+import { tooSoonAfterMasking } from './quarantine.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 const days = (count: number) => counted(count, 'day', 'days')
@@ -62,7 +63,9 @@ export const caseWords = defineMessages({
     `Steps of the leg from ${p.on}, closed after day ${p.days}`,
   before: 'Before clearance',
   nothingUnmet: 'Nothing stands between this case and clearance.',
-  criterionCount: (p: { count: number; wanted: number }) => `${p.count} of ${p.wanted}`,
+  criterionCount: (p: { count: number; wanted: number; met: boolean }) =>
+    `${p.count} of ${p.wanted}${p.met || p.count < p.wanted ? '' : tooSoonAfterMasking}`,
+  decisionsDue: 'Waits for a decision',
   criterionMetOn: (p: { on: string }) => `since ${p.on}`,
   criterionDeclared: 'a veterinarian declares it',
   earliestSample: (p: { on: string }) => `first sample that could meet it: ${p.on}`,

@@ -157,7 +157,6 @@ export const caseForms = defineMessages({
   clearReason: 'Why it is cleared all the same',
   clearReasonHint: 'Stands on the record and on the certificate.',
   clearMeaning: 'Sign the clearance',
-  clearWho: (p: { name: string }) => `${p.name}, with the licence valid today`,
   clearText: (p: { number: string; animals: string; day: string }) =>
     `${p.number}, ${p.animals}, ${p.day}: cleared from quarantine as of the moment of signing.`,
   clearAct: 'Clear from quarantine',

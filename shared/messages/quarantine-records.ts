@@ -1,6 +1,9 @@
 import type { LockCause } from '../domain/quarantine/case-clock.ts'
 import { defineMessages } from './define-messages.ts'
 
+/** In place of clinical words, for whoever reads no charts. */
+export const clinicalWords = defineMessages({ withheld: 'not shown to you' })
+
 const causes = defineMessages({
   positive: 'Positive result in quarantine',
   'notifiable-suspicion': 'Suspicion of a notifiable disease',

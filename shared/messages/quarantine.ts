@@ -1,5 +1,4 @@
 import type {
-  CaseClock,
   ClockDecisionDue,
   ClockExtension,
   LockCause,
@@ -8,16 +7,6 @@ import type {
 import type { ClockRefusal } from '../domain/quarantine/prepare-cases.ts'
 import type { QuarantineKind } from '../domain/quarantine/quarantine-kind.ts'
 import { counted, defineMessages } from './define-messages.ts'
-
-/** The states of a case, as they stand beside its flag. */
-export const caseStatusWords = defineMessages({
-  open: 'Batch still open',
-  'in-quarantine': 'In quarantine',
-  locked: 'Locked',
-  cleared: 'Cleared',
-  recalled: 'Recalled',
-  transferred: 'Transferred',
-} satisfies Record<CaseClock['status'], string>)
 
 export const quarantineKindWords = defineMessages({
   fish: 'fish',
@@ -56,6 +45,10 @@ interface UnmetParams {
   kind: string
 }
 
+/** Why as many negatives as are wanted can still not be enough. */
+export const tooSoonAfterMasking =
+  ', the last taken too soon after a treatment that can hide what the test looks for'
+
 /** What is missing for clearance; each is one line of the checklist. Dates and names come in already written out. */
 export const unmetWords = defineMessages({
   'not-closed': () => 'The batch is still open: close it when the last of it is in.',
@@ -71,7 +64,7 @@ export const unmetWords = defineMessages({
       : `Extended (${p.kind}) until ${p.untilOn}.`,
   'pause-running': () => 'The clock stands still at present.',
   'negatives-missing': (p) =>
-    `${p.criterionId}: ${p.count} of ${p.wanted}.${p.earliestSampleOn === '' ? '' : ` A sample taken on ${p.earliestSampleOn} or later can complete it.`}`,
+    `${p.criterionId}: ${p.count} of ${p.wanted}${p.count < p.wanted ? '' : tooSoonAfterMasking}.${p.earliestSampleOn === '' ? '' : ` A sample taken on ${p.earliestSampleOn} or later can complete it.`}`,
   'not-declared': (p) => `${p.criterionId}: nobody has declared it met.`,
 } satisfies Record<UnmetCriterion['code'], (params: UnmetParams) => string>)
 

@@ -112,6 +112,8 @@ export const permitMarkNames = defineMessages({
   expired: 'After its last day',
   'other-taxon': 'Another taxon than it names',
   voided: 'The permit is void',
+  'fewer-than-animals': 'Fewer taken under it than animals in the line',
+  'more-than-animals': 'More taken under it than animals in the line',
 } satisfies Record<PermitMark, string>)
 
 export const documentKindNames = defineMessages({

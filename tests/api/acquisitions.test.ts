@@ -2,7 +2,6 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aPlace, aStingray } from '../builders/a-collection.ts'
 import type { TestPlace } from '../builders/a-collection.ts'
 import { acquisitionBody, anAcquisition, aParty, aPermit, newLine } from '../builders/a-register.ts'
-import { simpleProtocolId } from '../builders/a-case.ts'
 import { newKey, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -330,49 +329,6 @@ describe('a transaction that was entered wrongly', () => {
       .send({ reason: 'Counted in the wrong tank' })
       .expect(200)
     expect((await voidIt(transaction.number)).status).toBe(200)
-  })
-
-  it('is not voided while its animals are in a quarantine case, and is when a veterinarian struck them out of it', async () => {
-    const transaction = await anAcquisition(api, { on: '2026-11-20', lines: [line({ count: 9 })] })
-    const accession = transaction.lines[0]?.accession ?? ''
-    const tech = await api.as('technician')
-    const memberId = api.nextId()
-    const opened = await tech.agent
-      .post('/api/cases')
-      .send({
-        id: api.nextId(),
-        protocolVersionId: simpleProtocolId,
-        members: [{ id: memberId, accession }],
-        happenedAt: '2026-11-20T14:00:00Z',
-      })
-      .expect(201)
-    const number = opened.body.number as string
-    const reply = await voidIt(transaction.number)
-    expect([reply.status, reply.body.code]).toEqual([409, 'later-records'])
-    expect(reply.body.detail).toContain(number)
-    await (
-      await api.as('veterinarian')
-    ).agent
-      .post(`/api/cases/${number}/decisions`)
-      .send({
-        id: api.nextId(),
-        happenedAt: '2026-12-01T14:00:00Z',
-        reason: 'They were never of this batch',
-        decision: { kind: 'voided', voidsEventId: memberId },
-      })
-      .expect(201)
-    expect((await voidIt(transaction.number)).status).toBe(200)
-  })
-
-  it('refuses a line, a use of a permit or a mark that stands in the form twice', async () => {
-    const permit = await aPermit(api, { quantityAllowed: 20 })
-    const own = line({ count: 5 })
-    const use = () => ({ id: api.nextId(), permitId: permit.id, lineId: own.id, quantity: 5 })
-    const twice = await send(acquisitionBody(api, { lines: [own], permitUses: [use(), use()] }))
-    expect([twice.status, pointers(twice.body)]).toEqual([422, ['/permitUses/1']])
-    const lines = await send(acquisitionBody(api, { lines: [own, { ...line({ count: 2 }), id: own.id }] }))
-    expect([lines.status, pointers(lines.body)]).toEqual([422, ['/lines/1/id']])
-    expect(lines.body.errors[0].detail).toBe('This stands in the list twice. Leave one out.')
   })
 
   it('gives the permit its animals back', async () => {

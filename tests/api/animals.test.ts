@@ -2,8 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aGroup, anAnimal, aPlace, arrivalAt, aStingray } from '../builders/a-collection.ts'
 import type { TestPlace } from '../builders/a-collection.ts'
 import { newKey, startApi } from '../support/api.ts'
-import type { TestApi, TestPerson } from '../support/api.ts'
-import { installation } from '../../server/platform/http/request-context.ts'
+import type { TestApi } from '../support/api.ts'
 
 let api: TestApi
 let taxonId: string
@@ -249,135 +248,6 @@ describe('moves', () => {
     const arrival = moves.body.rows.find((row: { kind: string }) => row.kind === 'arrival')
     expect((await strike(arrival.id)).body.code).toBe('part-of-another-record')
     expect(moves.body.rows.filter((row: { struck: unknown }) => row.struck)).toHaveLength(2)
-  })
-})
-
-describe('striking out', () => {
-  const strike = async (person: Promise<TestPerson> | TestPerson, url: string, what: string, id: string) =>
-    (await person).agent
-      .post(`${url}/${what}/${id}/void`)
-      .set('Idempotency-Key', newKey())
-      .send({ reason: 'It was another tank' })
-  const happenedAt = monday
-
-  it('of a death is for whoever recorded it, on the same day, or for a veterinarian', async () => {
-    const school = await aGroup(api, { taxonId, enclosureId: kelp.id, count: 12 })
-    const { agent } = await api.as('keeper')
-    const record = async () => {
-      const id = api.nextId()
-      await agent
-        .post(`${school.url}/deaths`)
-        .send({ id, kind: 'found-dead', count: 1, happenedAt })
-        .expect(201)
-      return id
-    }
-    const [slip, late, other] = [await record(), await record(), await record()]
-    const refused = await strike(api.as('technician'), school.url, 'deaths', other)
-    expect([refused.status, refused.body.code]).toEqual([403, 'may-not'])
-    expect(refused.body.detail).toMatch(/veterinarian/)
-    expect((await strike(api.as('keeper'), school.url, 'deaths', slip)).status).toBe(200)
-    const today = api.clock.now()
-    api.clock.set(new Date(today.getTime() + 24 * 3600_000))
-    expect((await strike(api.as('keeper'), school.url, 'deaths', late)).status).toBe(403)
-    expect((await strike(api.as('veterinarian'), school.url, 'deaths', late)).status).toBe(200)
-    api.clock.set(today)
-    expect((await agent.get(school.url)).body.count.ledger).toBe(11)
-  })
-
-  it('of a move is for whoever recorded it, for a veterinarian, and for the registrar where it broke no rule', async () => {
-    const wing = await aPlace(api, { boundary: 'Striking wing' })
-    const ray = await anAnimal(api, { taxonId, enclosureId: wing.id })
-    await api.composition.parts.transactions.inTransaction(
-      { actor: installation, requestId: 'test' },
-      async (tx) => {
-        await api.composition.animals.service.lockMovement(tx, {
-          animalId: ray.id,
-          kind: 'boundary',
-          source: { kind: 'case', id: api.nextId(), label: 'Q-014' },
-          reason: 'in quarantine',
-          at: arrivalAt,
-        })
-      },
-    )
-    const transfer = api.nextId()
-    const vet = await api.as('veterinarian')
-    await vet.agent
-      .post(`${ray.url}/moves`)
-      .send({
-        id: transfer,
-        fromEnclosureId: wing.id,
-        toEnclosureId: river.id,
-        documentedTransfer: 'to the river gallery, same clock',
-        happenedAt,
-      })
-      .expect(201)
-    for (const role of ['technician', 'keeper', 'registrar'] as const)
-      expect((await strike(api.as(role), ray.url, 'moves', transfer)).body.code).toBe('may-not')
-    expect((await strike(vet, ray.url, 'moves', transfer)).status).toBe(200)
-
-    const free = await anAnimal(api, { taxonId, enclosureId: kelp.id })
-    const plain = api.nextId()
-    const { agent } = await api.as('keeper')
-    await agent
-      .post(`${free.url}/moves`)
-      .send({ id: plain, fromEnclosureId: kelp.id, toEnclosureId: river.id, happenedAt })
-      .expect(201)
-    expect((await strike(api.as('technician'), free.url, 'moves', plain)).status).toBe(403)
-    expect((await strike(api.as('registrar'), free.url, 'moves', plain)).status).toBe(200)
-  })
-})
-
-describe('dates and lists that cannot be', () => {
-  it('are refused in plain words wherever they are entered, not answered with a failure', async () => {
-    const school = await aGroup(api, { taxonId, enclosureId: kelp.id, count: 12 })
-    const registrar = await api.as('registrar')
-    for (const year of ['0000', '0206', '1200', '9999']) {
-      const happenedAt = `${year}-11-30T14:00:00Z`
-      const death = { id: api.nextId(), kind: 'found-dead', count: 1, happenedAt }
-      for (const reply of [
-        await (await api.as('keeper')).agent.post(`${school.url}/deaths`).send(death),
-        await registrar.agent.get(`/api/enclosures/${kelp.code}/inhabitants?at=${happenedAt}`),
-      ]) {
-        expect(reply.status, year).toBe(422)
-        expect(reply.body.errors[0].detail).toBe('Check the year: it has to lie between 1900 and 2199')
-      }
-    }
-    const adjust = (happenedAt: string) =>
-      registrar.agent
-        .post(`${school.url}/adjustments`)
-        .send({ id: api.nextId(), delta: 3, reason: 'counted in the dark', happenedAt })
-    const early = await adjust('2026-10-01T12:00:00Z')
-    expect([early.status, early.body.code]).toEqual([409, 'not-here-then'])
-    expect((await adjust(monday)).status).toBe(201)
-  })
-
-  it('like a birth after arrival, or ahead of today; an egg may hatch here', async () => {
-    const ray = await anAnimal(api, { taxonId, enclosureId: kelp.id })
-    const { agent } = await api.as('registrar')
-    let version = 1
-    const describe = async (kind: string, date: string) => {
-      const reply = await agent.put(`${ray.url}/description`).send({
-        expectedVersion: version,
-        taxonId,
-        name: null,
-        sex: 'unknown',
-        stage: 'juvenile',
-        birth: { kind, date, approximate: false },
-        happenedAt: monday,
-      })
-      if (reply.status === 200) version = reply.body.version as number
-      return reply
-    }
-    for (const [kind, date] of [
-      ['born', '2026-11-20'],
-      ['hatched', '2027-01'],
-      ['born', '1200'],
-    ] as const) {
-      const reply = await describe(kind, date)
-      expect([reply.status, reply.body.errors[0].pointer], date).toEqual([422, '/birth/date'])
-    }
-    expect((await describe('hatched', '2026-11-20')).status).toBe(200)
-    expect((await describe('born', '2026-11')).status).toBe(200)
   })
 })
 

@@ -203,6 +203,49 @@ describe('the use-up of a permit', () => {
     expect(await read(permit)).toMatchObject({ used: 6, remaining: 4 })
   })
 
+  it('covers all animals of a line, with others of its kind; of what happened the rest is marked', async () => {
+    const permit = await aPermit(api, { quantityAllowed: 50 })
+    const second = await aPermit(api, { quantityAllowed: 50 })
+    const send = async (stage: 'now' | 'already', uses: [Permit, number][]) => {
+      const line = newLine(api, { taxonId: ray, enclosureId: tank.id, count: 8 })
+      const permitUses = uses.map(([of, quantity]) => ({
+        id: api.nextId(),
+        permitId: of.id,
+        lineId: line.id,
+        quantity,
+      }))
+      return (await registrar()).post('/api/register/acquisitions').send(
+        acquisitionBody(api, {
+          kind: 'wild-collection',
+          stage,
+          on: '2026-12-01',
+          lines: [line],
+          permitUses,
+        }),
+      )
+    }
+    const fewer = await send('now', [[permit, 5]])
+    expect([fewer.status, fewer.body.code]).toEqual([409, 'permit-does-not-cover'])
+    expect(fewer.body.errors).toMatchObject([
+      { pointer: '/permitUses/0/permitId', code: 'fewer-than-animals' },
+    ])
+    expect(fewer.body.detail).toContain('8\u00a0animals are in the line')
+    expect(
+      (
+        await send('now', [
+          [permit, 5],
+          [second, 3],
+        ])
+      ).status,
+    ).toBe(201)
+    expect((await send('already', [[permit, 5]])).status).toBe(201)
+    expect((await send('already', [[permit, 9]])).status).toBe(201)
+    const { uses } = await read(permit)
+    expect(uses.map(({ marks }) => marks)).toEqual(
+      expect.arrayContaining([[], ['fewer-than-animals'], ['more-than-animals']]),
+    )
+  })
+
   it('is one use when two lines of one form share the last animals', async () => {
     const permit = await aPermit(api, { quantityAllowed: 10 })
     const lines = [1, 2].map(() => newLine(api, { taxonId: ray, enclosureId: tank.id, count: 6 }))

@@ -134,6 +134,13 @@ describe('the clock of a case', () => {
     const codes = signed.body.reasons.map((reason: { code: string }) => reason.code)
     expect(codes).toContain('extended-death')
     expect(codes).toContain('death-explained')
+    // Whoever reads no charts sees the case and its clock without the words of the chart
+    const admin = await api.as('administrator')
+    for (const url of [one.url, '/api/cases']) {
+      const shown = await admin.agent.get(url).expect(200)
+      expect(JSON.stringify(shown.body)).not.toContain('outflow screen')
+      expect(JSON.stringify(shown.body)).toContain('not shown to you')
+    }
 
     // What a veterinarian signed a cause for is struck out by nobody before the signature is
     const strike = (agent: typeof vet.agent) =>

@@ -32,6 +32,11 @@ const subject = (transaction: { id: string; number: string }) => ({
   label: transaction.number,
 })
 
+const animalsOf = (line: Pick<TransactionLine, 'count' | 'deadOnArrival'> | undefined) => ({
+  alive: line?.count ?? 0,
+  dead: line?.deadOnArrival ?? 0,
+})
+
 /** Lines of groups that are already here first, then new ones: so rows are locked before numbers are drawn. */
 function inLockOrder<T extends { animalId: string; record?: string }>(lines: readonly T[]) {
   return lines
@@ -117,6 +122,7 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
       tx,
       given.permitUses.map((use, index) => ({
         ...use,
+        animals: animalsOf(lines.find((line) => line.id === use.lineId)),
         transactionId: head.id,
         taxonId: lines.find((line) => line.id === use.lineId)?.taxonId ?? '',
         first: placed.first,

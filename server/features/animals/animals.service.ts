@@ -10,6 +10,7 @@ import { createLedgers } from './ledgers.ts'
 import { createLocks } from './locks.service.ts'
 import { createMoves } from './moves.service.ts'
 import type { WaterQuestions } from '../water/index.ts'
+import { createStrikeAccession } from './strike-accession.service.ts'
 import { createTaxaService } from './taxa.service.ts'
 import { createWaterLocks } from './water-locks.ts'
 import { createWeights } from './weights.service.ts'
@@ -32,6 +33,7 @@ export function createAnimalsService(parts: {
   return {
     ...createTaxaService(parts),
     ...createAccession({ ...withMoves, identify }),
+    ...createStrikeAccession(withLedgers),
     ...createGroups(withMoves),
     ...createCounts(withMoves),
     ...createWeights(withMoves),

@@ -104,3 +104,12 @@ export function isExplained(tx: Tx, permitUseId: string): Promise<boolean> {
 export async function insertExplanation(tx: Tx, row: PermitUseExplanation): Promise<void> {
   await tx.manager.insert(PermitUseExplanation, row)
 }
+
+/** The kind of each of these permits; unknown ones are left out. */
+export async function kindsOf(tx: Tx, ids: readonly string[]): Promise<Map<string, string>> {
+  const rows: { id: string; kind: string }[] = await tx.manager.query(
+    'SELECT p.id, p.kind FROM permits p WHERE p.id = ANY ($1::uuid[])',
+    [ids],
+  )
+  return new Map(rows.map((row) => [row.id, row.kind]))
+}

@@ -1,5 +1,6 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type { enterPermit } from '../../../shared/contracts/permits.contract.ts'
+import { judgeLineCover } from '../../../shared/domain/register/judge-line-cover.ts'
 import { judgePermitUse } from '../../../shared/domain/register/judge-permit-use.ts'
 import type { PermitMark } from '../../../shared/domain/register/judge-permit-use.ts'
 import { permitSentences } from '../../../shared/messages/permit-sentences.ts'
@@ -25,6 +26,8 @@ export interface UseGiven {
   transactionId: string
   lineId: string
   quantity: number
+  /** Animals of the line: alive, and dead in the boxes. */
+  animals: { alive: number; dead: number }
   taxonId: string
   /** First and last day on which it may have happened. */
   first: string
@@ -118,6 +121,10 @@ export function createPermitsService(parts: PermitsParts) {
      */
     async useUp(tx: Tx, uses: readonly UseGiven[]): Promise<Map<string, PermitMark[]>> {
       const marks = new Map<string, PermitMark[]>()
+      const kinds = await repository.kindsOf(
+        tx,
+        uses.map((use) => use.permitId),
+      )
       const refused: { pointer: string; detail: string; code: string }[] = []
       for (const permitId of [...new Set(uses.map((use) => use.permitId))].sort()) {
         await repository.lockPermit(tx, permitId)
@@ -138,10 +145,18 @@ export function createPermitsService(parts: PermitsParts) {
           const judged = judgePermitUse(terms, await repository.usedSoFar(tx, permitId), use)
           if (!judged.ok) throw new Problem('bad-input', { errors: [{ pointer: use.pointer, detail: '' }] })
           const { value } = judged
-          marks.set(use.id, value.marks)
+          const ofKind = uses.filter(
+            (other) => other.lineId === use.lineId && kinds.get(other.permitId) === permit.kind,
+          )
+          const cover = judgeLineCover(
+            use.animals,
+            ofKind.map((other) => other.quantity),
+          )
+          const found = cover === null ? value.marks : [...value.marks, cover]
+          marks.set(use.id, found)
           if (use.stage === 'now')
             refused.push(
-              ...value.marks.map((mark) => ({
+              ...found.map((mark) => ({
                 pointer: use.pointer,
                 code: mark,
                 detail: permitSentences[mark]({
@@ -150,6 +165,7 @@ export function createPermitsService(parts: PermitsParts) {
                   validUntil: permit.validUntil,
                   remaining: value.remainingBefore ?? 0,
                   wanted: use.quantity,
+                  alive: use.animals.alive,
                 }),
               })),
             )
@@ -160,7 +176,7 @@ export function createPermitsService(parts: PermitsParts) {
             lineId: use.lineId,
             quantity: use.quantity,
             excess: value.excess,
-            marks: value.marks,
+            marks: found,
             recordedAt: tx.at,
             recordedBy: tx.actor.personId,
           })

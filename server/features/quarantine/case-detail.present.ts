@@ -11,6 +11,7 @@ import type { Estimates } from './cases.present.ts'
 import { countAt } from './clock-events.ts'
 import { protocolInForce } from './protocol-in-force.ts'
 import { isLive } from './read-clocks.ts'
+import { readsClinical, withholdFromCase } from './withhold-clinical.ts'
 import type { ClockFacts } from './read-clocks.ts'
 
 /** What a case shows besides its clock, read by the caller. */
@@ -129,7 +130,7 @@ export function presentCase(facts: ClockFacts, head: CaseReadRow, extras: CaseEx
   const eventOf = (id: string) => facts.events.find((row) => row.id === id)
   const clearedEvent = own.find((row) => row.kind === 'cleared')
   const clearedBy = signatureOf(clearedEvent)
-  return {
+  const detail: CaseDetail = {
     ...presentCaseRow(facts, head, extras.work, extras.estimates),
     asOf: facts.asOf.toISOString(),
     openedAt: head.happened_at.toISOString(),
@@ -160,6 +161,7 @@ export function presentCase(facts: ClockFacts, head: CaseReadRow, extras: CaseEx
       state,
     })),
     unmet: clock.unmet,
+    decisionsDue: clock.decisionsDue.map(({ code, eventId }) => ({ code, eventId })),
     openDiscrepancies: extras.openDiscrepancies,
     locks: clock.locks
       .filter(({ liftedAt }) => liftedAt === null)
@@ -195,6 +197,7 @@ export function presentCase(facts: ClockFacts, head: CaseReadRow, extras: CaseEx
     version: head.version,
     may: caseActions.filter((action) => decide(action, extras.roles).allowed),
   }
+  return readsClinical(extras.roles) ? detail : withholdFromCase(detail)
 
   function signatureOf(event: CaseEventReadRow | undefined): SignatureBlock | null {
     return extras.signatures.get(event?.signed_text_id ?? '') ?? null

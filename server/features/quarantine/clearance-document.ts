@@ -112,7 +112,7 @@ function conditionsTable({ content }: ClearancePaper): DocumentBlock {
     rows: content.criteria.map(({ name, met, metOn, count, wanted }) => [
       name,
       (met ? (metOn === null ? words.met : words.metOn({ on: sayDate(metOn) })) : words.notMet) +
-        (wanted > 0 ? words.negatives({ count, wanted }) : ''),
+        (wanted > 0 ? words.negatives({ count, wanted, met }) : ''),
     ]),
     emptyText: words.noConditions,
   }

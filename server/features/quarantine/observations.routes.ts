@@ -5,6 +5,7 @@ import type { Route } from '../../platform/http/route.ts'
 import type { BodiesService } from './bodies.service.ts'
 import type { NoticesService } from './notices.service.ts'
 import type { ObservationQueries } from './observations.queries.ts'
+import { readsClinical, withholdFromObservation } from './withhold-clinical.ts'
 import type { ObservationsService } from './observations.service.ts'
 
 /** Observations, the round, and urgent calls. */
@@ -20,7 +21,11 @@ export function observationRoutes(parts: {
       await observations.record(context, body)
       return queries.observation(body.id)
     }),
-    route(contracts.listObservations, ({ query }) => queries.observations(query)),
+    route(contracts.listObservations, async ({ query, context }) => {
+      const found = await queries.observations(query)
+      if (readsClinical(context.actor.roles)) return found
+      return { ...found, rows: found.rows.map(withholdFromObservation) }
+    }),
     route(contracts.reviewObservation, async ({ params, body, context }) => {
       await observations.review(context, params.id, body)
       return queries.observation(params.id)

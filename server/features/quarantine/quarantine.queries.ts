@@ -25,6 +25,7 @@ import { presentProtocol } from './protocols.present.ts'
 import { readProtocolVersions } from './protocols.reads.ts'
 import { isLive, readClocks } from './read-clocks.ts'
 import type { ClockFacts, WantedCases } from './read-clocks.ts'
+import { readsClinical, withholdFromRow } from './withhold-clinical.ts'
 import { readSignedEvent } from './read-signed-event.ts'
 
 type Board = ReplyOf<typeof contracts.listCases>
@@ -71,7 +72,8 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
   }
 
   return {
-    async board(query: BoardQuery): Promise<Board> {
+    /** @param roles of the reader; absent for work that is made inside the server */
+    async board(query: BoardQuery, roles?: readonly Role[]): Promise<Board> {
       const asOf = query.asOf ? new Date(query.asOf) : clock.now()
       const view = query.view ?? 'running'
       const facts = await clocksOf('all', asOf)
@@ -91,7 +93,7 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const page = pageOf(query)
       const rows = sorted.slice(page.offset, page.offset + page.limit)
       return {
-        rows,
+        rows: roles && !readsClinical(roles) ? rows.map(withholdFromRow) : rows,
         total: sorted.length,
         nextCursor: nextCursorOf(page, sorted.length),
         tally: tallyOf(all),

@@ -32,7 +32,7 @@ export function quarantineRoutes(parts: RouteParts): Route[] {
       if (!Number.isSafeInteger(version)) throw new Problem('not-found')
       return queries.protocol(await parts.protocols.confirm(context, params.code, version, body.reason))
     }),
-    route(contracts.listCases, ({ query }) => queries.board(query)),
+    route(contracts.listCases, ({ query, context }) => queries.board(query, context.actor.roles)),
     route(contracts.getCase, ({ params, query, context }) =>
       queries.caseOf(params.number, context.actor.roles, query.asOf),
     ),

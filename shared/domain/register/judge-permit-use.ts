@@ -1,4 +1,5 @@
 import { ok, refuse, type Result } from '../result.ts'
+import type { CoverMark } from './judge-line-cover.ts'
 import type { FacilityDate } from '../time/instant.ts'
 
 /** A permit as far as its use-up is judged. */
@@ -13,7 +14,7 @@ export interface PermitTerms {
 }
 
 /** What is wrong with taking animals under a permit. */
-export type PermitMark = 'over-quantity' | 'not-yet-valid' | 'expired' | 'other-taxon' | 'voided'
+export type PermitMark = 'over-quantity' | 'not-yet-valid' | 'expired' | 'other-taxon' | 'voided' | CoverMark
 
 export interface PermitJudgement {
   /** Whole animals left before this use; null when the permit states no number. */

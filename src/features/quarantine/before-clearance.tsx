@@ -16,7 +16,7 @@ export function clearanceConditions(detail: CaseDetail): Condition[] {
   const criteria = detail.criteria.map((one): Condition => {
     const known = [
       one.wanted > 0
-        ? words.criterionCount({ count: one.count, wanted: one.wanted })
+        ? words.criterionCount({ count: one.count, wanted: one.wanted, met: one.met })
         : one.met
           ? ''
           : words.criterionDeclared,

@@ -5,7 +5,7 @@ import { Link } from 'react-router-dom'
 import { getCertificate } from '../../../shared/contracts/clearance.contract.ts'
 import type { CaseStepView } from '../../../shared/contracts/quarantine-primitives.ts'
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
-import { quarantineKindWords } from '../../../shared/messages/quarantine.ts'
+import { clockDecisionWords, quarantineKindWords } from '../../../shared/messages/quarantine.ts'
 import { caseWords as words } from '../../../shared/messages/quarantine-case.ts'
 import { quarantineWords } from '../../../shared/messages/quarantine-screens.ts'
 import { sayDate } from '../../../shared/messages/say-date.ts'
@@ -158,6 +158,15 @@ function CaseHead({
         {paused ? (
           <p className="t-strong">{words.standsStill({ at: sayMoment(paused.since, zone, detail.asOf) })}</p>
         ) : null}
+        {detail.decisionsDue.length > 0 ? (
+          <ul className="stack gap-2" aria-label={words.decisionsDue}>
+            {detail.decisionsDue.map(({ code, eventId }) => (
+              <li key={`${code} ${eventId}`} className="t-strong">
+                {clockDecisionWords[code]}
+              </li>
+            ))}
+          </ul>
+        ) : null}
         {detail.sharesWaterWith.length > 0 ? (
           <p>{words.sharesWater({ cases: detail.sharesWaterWith.join(', ') })}</p>
         ) : null}
@@ -239,6 +248,7 @@ function Changes({ of: detail, zone }: { of: CaseDetail; zone: string }) {
 
 function Clearance({ of: detail }: { of: CaseDetail }) {
   const { clearance } = detail
+  const mayPrint = useMay('register.read')
   if (!clearance) return null
   return (
     <section className="stack" aria-labelledby="case-clearance">
@@ -250,9 +260,11 @@ function Clearance({ of: detail }: { of: CaseDetail }) {
         <p>{words.against({ count: clearance.against, reason: clearance.reason ?? '' })}</p>
       ) : null}
       <OrderSignature signature={clearance.signature} />
-      <a className="btn" href={addressOf(getCertificate, { number: detail.number })} download>
-        {words.certificate}
-      </a>
+      {mayPrint.allowed ? (
+        <a className="btn" href={addressOf(getCertificate, { number: detail.number })} download>
+          {words.certificate}
+        </a>
+      ) : null}
     </section>
   )
 }

@@ -1,9 +1,12 @@
 import { useState } from 'react'
 import { Link, useNavigate } from 'react-router-dom'
+import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
 import { caseWords } from '../../../shared/messages/quarantine-case.ts'
 import { caseForms as words } from '../../../shared/messages/quarantine-forms.ts'
+import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { quarantineWords } from '../../../shared/messages/quarantine-screens.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
@@ -140,7 +143,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
           onChange={({ target }) => setReason(target.value)}
         />
       ) : null}
-      <SignatureBlock meaning={words.clearMeaning} who={words.clearWho({ name: me.printedName })}>
+      <SignatureBlock meaning={words.clearMeaning} who={<Signer me={me} />}>
         <p>
           {words.clearText({
             number,
@@ -172,5 +175,24 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
         </div>
       </SignatureBlock>
     </form>
+  )
+}
+
+/** Who signs, with the licence that the signature will show. */
+function Signer({ me }: { me: Me }) {
+  const licence = me.licences.find(({ validToday }) => validToday)
+  return (
+    <>
+      <b>{me.printedName}</b>
+      {licence ? (
+        <span className="block">
+          {orderViewWords.licence({
+            jurisdiction: licence.jurisdiction,
+            number: licence.number,
+            until: sayDate(licence.validUntil),
+          })}
+        </span>
+      ) : null}
+    </>
   )
 }

@@ -1,3 +1,5 @@
+import { clearanceWords } from '../../../shared/messages/clearance.ts'
+import { caseWords } from '../../../shared/messages/quarantine-case.ts'
 import { describe, expect, it } from 'vitest'
 import type { ClockReason } from '../../../shared/domain/quarantine/clock-reason.ts'
 import { clockReasons } from '../../../shared/messages/clock-reasons.ts'
@@ -150,5 +152,16 @@ describe('the sentences of a clock', () => {
     } finally {
       setMessageLocale('en')
     }
+  })
+})
+
+describe('negatives that are as many as wanted and still not enough', () => {
+  it('say why, on the certificate and on the screen', () => {
+    const why = /2 of 2, the last taken too soon after a treatment that can hide what the test looks for/
+    const state = { count: 2, wanted: 2, met: false }
+    expect(clearanceWords.negatives(state)).toMatch(why)
+    expect(caseWords.criterionCount(state)).toMatch(why)
+    expect(clearanceWords.negatives({ ...state, met: true })).toBe(', 2 of 2')
+    expect(caseWords.criterionCount({ ...state, count: 1 })).toBe('1 of 2')
   })
 })

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { judgeLineCover } from '../../../shared/domain/register/judge-line-cover.ts'
 import { judgePermitUse } from '../../../shared/domain/register/judge-permit-use.ts'
 import type { PermitTerms } from '../../../shared/domain/register/judge-permit-use.ts'
 import { permitState } from '../../../shared/domain/register/permit-state.ts'
@@ -19,6 +20,18 @@ const judge = (given: Partial<PermitTerms>, usedSoFar = 0, over: Partial<typeof 
   if (!judged.ok) throw new Error(judged.refusal.code)
   return judged.value
 }
+
+describe('the animals of a line under the permits of one kind', () => {
+  const line = { alive: 8, dead: 2 }
+  it('are covered together, the dead in the boxes counted or not', () => {
+    for (const quantities of [[8], [5, 3], [10], [9]]) expect(judgeLineCover(line, quantities)).toBeNull()
+  })
+  it('are too many for what was taken, or too few', () => {
+    expect(judgeLineCover(line, [5])).toBe('fewer-than-animals')
+    expect(judgeLineCover(line, [5, 2])).toBe('fewer-than-animals')
+    expect(judgeLineCover(line, [8, 3])).toBe('more-than-animals')
+  })
+})
 
 describe('taking animals under a permit', () => {
   it('counts what is left', () => {
