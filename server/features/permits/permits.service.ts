@@ -54,6 +54,8 @@ export function createPermitsService(parts: PermitsParts) {
       return parts.transactions.inTransaction(context, async (tx) => {
         const { id, taxonIds, ...rest } = given
         const wanted = [...new Set(taxonIds)].sort()
+        // Two people with the same paper in hand: the second is told, not the database
+        await repository.lockPermit(tx, `${given.authority} ${given.permitNumber}`.toLowerCase())
         const earlier = await repository.findPermit(tx, id)
         if (earlier && JSON.stringify(await repository.taxaOf(tx, id)) !== JSON.stringify(wanted))
           throw new Problem('id-already-used')
@@ -65,8 +67,6 @@ export function createPermitsService(parts: PermitsParts) {
           throw new Problem('not-found', {
             errors: [{ pointer: '/taxonIds', detail: permitSentences.noSuchTaxon }],
           })
-        // Two people with the same paper in hand: the second is told, not the database
-        await repository.lockPermit(tx, `${given.authority} ${given.permitNumber}`.toLowerCase())
         const standing = await repository.findStanding(tx, given.authority, given.permitNumber)
         if (standing !== null && standing !== id)
           throw new Problem('number-already-used', {
