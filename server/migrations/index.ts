@@ -10,6 +10,7 @@ import { Notices1764600000014 } from './0014-notices.ts'
 import { Handover1764600000016 } from './0016-handover.ts'
 import { LotLooks1764600000019 } from './0019-lot-looks.ts'
 import { AmountsSeen1764600000023 } from './0023-amounts-seen.ts'
+import { RecordRequests1764600000024 } from './0024-record-requests.ts'
 import { Bodies1764600000026 } from './0026-bodies.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
@@ -27,5 +28,6 @@ export const migrations = [
   Handover1764600000016,
   LotLooks1764600000019,
   AmountsSeen1764600000023,
+  RecordRequests1764600000024,
   Bodies1764600000026,
 ]

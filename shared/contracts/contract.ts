@@ -41,11 +41,13 @@ export interface Contract<
   consumes?: 'json' | 'multipart'
 }
 
-/** Makes a contract; keeps the exact types of its schemas. */
+/** Makes a contract; keeps the exact types of its schemas. Any record may be sent again with other content. */
 export function contract<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType>(
   description: Contract<P, Q, B, R>,
 ): Contract<P, Q, B, R> {
-  return description
+  const { idempotent, problems } = description
+  if (idempotent !== 'by-record-id' || problems.includes('id-already-used')) return description
+  return { ...description, problems: [...problems, 'id-already-used'] }
 }
 
 // A schema that a contract does not state infers as `unknown`: nothing can be read from it by mistake.

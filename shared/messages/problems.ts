@@ -93,3 +93,9 @@ export const problemTitles = defineMessages({
   'reason-needed': 'A reason is needed',
   'form-too-old': 'This entry was made with a form that is no longer taken',
 })
+
+/** What to do when an entry was sent before with other content. */
+export const sentBefore = defineMessages({
+  whatToDo:
+    'The first one stands as it was sent; this one is not recorded. Look at what is recorded. Where it is wrong, strike it out and enter it anew.',
+})

@@ -1,5 +1,6 @@
 import { In } from 'typeorm'
 import type { EntityTarget, ObjectLiteral } from 'typeorm'
+import { idAlreadyUsed } from './id-already-used.ts'
 import { Problem } from '../http/problem.ts'
 import type { Tx } from './transactions.ts'
 
@@ -45,8 +46,7 @@ export async function isRepeated<T extends ObjectLiteral & { id: string }>(
 ): Promise<boolean> {
   const earlier = await tx.manager.findOneBy(target, { id: content.id } as never)
   if (!earlier) return false
-  if (!isSame<Partial<T>>(earlier, content, Object.keys(content) as (keyof T)[]))
-    throw new Problem('id-already-used')
+  if (!isSame<Partial<T>>(earlier, content, Object.keys(content) as (keyof T)[])) throw idAlreadyUsed()
   return true
 }
 
@@ -86,7 +86,7 @@ export async function insertManyOnce<T extends ObjectLiteral & { id: string }>(
   const fresh = rows.filter((row) => !earlier.has(row.id))
   for (const row of rows) {
     const before = earlier.get(row.id)
-    if (before && !isSame(before, row, compare)) throw new Problem('id-already-used')
+    if (before && !isSame(before, row, compare)) throw idAlreadyUsed()
   }
   if (fresh.length > 0) await tx.manager.insert(target, fresh as never)
   return new Set(fresh.map((row) => row.id))

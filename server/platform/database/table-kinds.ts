@@ -14,6 +14,7 @@ export const tableKinds: Record<string, TableKind> = {
   session: 'plumbing',
   rate_limits: 'plumbing',
   command_keys: 'plumbing',
+  record_requests: 'ledger',
   counters: 'plumbing',
   audit_entries: 'ledger',
   people: 'draft',

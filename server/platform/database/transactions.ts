@@ -6,6 +6,7 @@ import type { Actor, RequestContext } from '../http/request-context.ts'
 import type { Clock } from '../clock.ts'
 import { appendToChain } from '../audit/append-to-chain.ts'
 import type { AuditDraft } from '../audit/append-to-chain.ts'
+import { idAlreadyUsed } from './id-already-used.ts'
 import { problemFromConstraint } from './constraint-problems.ts'
 
 declare const made: unique symbol
@@ -47,6 +48,27 @@ export function driverError(error: unknown): { code?: string; constraint?: strin
   return (error as { driverError?: { code?: string; constraint?: string } }).driverError ?? {}
 }
 
+/**
+ * Notes what was sent under the id of a record; the same again goes on, and its service finds the record there. Written
+ * in the transaction of the record, so that a refused entry may be mended and sent under its id.
+ */
+async function claimRecord(manager: EntityManager, context: RequestContext, at: Date): Promise<void> {
+  const { record } = context
+  if (!record) return
+  const key = [record.id, record.contractId]
+  const claimed: unknown[] = await manager.query(
+    `INSERT INTO record_requests (record_id, contract_id, content_hash, recorded_at)
+     VALUES ($1, $2, $3, $4) ON CONFLICT (record_id, contract_id) DO NOTHING RETURNING record_id`,
+    [...key, record.contentHash, at],
+  )
+  if (claimed.length > 0) return
+  const [earlier]: { content_hash: string }[] = await manager.query(
+    `SELECT r.content_hash FROM record_requests r WHERE r.record_id = $1 AND r.contract_id = $2`,
+    key,
+  )
+  if (earlier?.content_hash !== record.contentHash) throw idAlreadyUsed()
+}
+
 class Replayed extends Error {
   constructor(readonly result: Json | null) {
     super('replayed')
@@ -71,9 +93,14 @@ async function claimCommand(manager: EntityManager, context: RequestContext, at:
   throw new Replayed(earlier.result === null ? null : (JSON.parse(earlier.result) as Json))
 }
 
-/** Hash of a command's content, kept to tell a repetition from another command under the same key. */
+export const hashOf = (text: string): string => createHash('sha256').update(text).digest('hex')
+
+/**
+ * Hash of a command's content, kept to tell a repetition from another command under the same key. Passwords are left
+ * out: a plain hash of one could be guessed from.
+ */
 export function bodyHashOf(parts: unknown): string {
-  return createHash('sha256').update(JSON.stringify(parts)).digest('hex')
+  return hashOf(JSON.stringify(parts, (key, value: unknown) => (/password/i.test(key) ? undefined : value)))
 }
 
 export function createTransactions(parts: { dataSource: DataSource; clock: Clock }): Transactions {
@@ -89,6 +116,7 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
       const at = parts.clock.now()
       const manager = runner.manager
       await claimCommand(manager, context, at)
+      await claimRecord(manager, context, at)
       const tx = {
         manager,
         context,

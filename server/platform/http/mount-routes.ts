@@ -3,15 +3,17 @@ import type { Request, RequestHandler, Response, Router } from 'express'
 import { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import type { z } from 'zod'
+import { canonicalJson } from '../../../shared/domain/canonical-json.ts'
+import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { successStatus } from '../../../shared/contracts/contract.ts'
 import type { Contract } from '../../../shared/contracts/contract.ts'
 import { personHeader } from '../../../shared/contracts/person-header.ts'
-import { bodyHashOf } from '../database/transactions.ts'
+import { bodyHashOf, hashOf } from '../database/transactions.ts'
 import { checkGate, checkWriter } from './guard.ts'
 import type { SignedIn } from './guard.ts'
 import { Problem } from './problem.ts'
 import { installation } from './request-context.ts'
-import type { RequestContext } from './request-context.ts'
+import type { RecordRequest, RequestContext } from './request-context.ts'
 import { requestIdOf } from './request-id.ts'
 import type { FileReply, Route } from './route.ts'
 import { fieldProblems } from './to-problem.ts'
@@ -70,8 +72,24 @@ function parseCall(of: Contract, req: Request) {
   return { params: params.value, query: query.value, body: body.value }
 }
 
+/**
+ * The record that a request carries, with a hash of what was sent for it. How it came is no part of the content: an
+ * entry that is sent again from an outbox is the same entry. A file is compared by its own hash where it is stored.
+ */
+function recordOf(of: Contract, req: Request, { actor }: RequestContext): RecordRequest | null {
+  const body: unknown = req.body
+  if (typeof body !== 'object' || body === null || !('id' in body) || typeof body.id !== 'string') return null
+  const { origin: _, ...content } = body as Record<string, Json>
+  const contentHash = hashOf(canonicalJson({ params: req.params as Json, by: actor.personId, content }))
+  return { id: body.id, contractId: of.id, contentHash }
+}
+
 function contextOf(of: Contract, req: Request, person: SignedIn | null, content: unknown): RequestContext {
   const context: RequestContext = { actor: person ?? installation, requestId: requestIdOf(req) }
+  if (of.idempotent === 'by-record-id') {
+    const record = recordOf(of, req, context)
+    return record ? { ...context, record } : context
+  }
   if (of.idempotent !== 'by-key') return context
   const key = req.get('idempotency-key')
   if (!key || key.length > 100)

@@ -15,11 +15,19 @@ export interface Command {
   bodyHash: string
 }
 
+/** A record sent under its own id: written once, and never again with other content. */
+export interface RecordRequest {
+  id: string
+  contractId: string
+  contentHash: string
+}
+
 /** What a service needs to know about the call it serves. */
 export interface RequestContext {
   actor: Actor
   requestId: string
   command?: Command
+  record?: RecordRequest
 }
 
 /** The installation itself, for work that no person asked for. */

@@ -79,7 +79,7 @@ export function LiftDialog({
 }) {
   const lift = useLiftLock(number)
   const toast = useToast()
-  const [id] = useState(newId)
+  const [given] = useState(() => ({ id: newId(), happenedAt: new Date().toISOString() }))
   return (
     <ReasonDialog
       question={words.liftQuestion({ cause: lockCauseWords[lock.cause] })}
@@ -90,10 +90,9 @@ export function LiftDialog({
       onBack={onBack}
       onAct={async (reason) => {
         await lift.mutateAsync({
-          id,
+          ...given,
           lockEventId: lock.eventId,
           reason,
-          happenedAt: new Date().toISOString(),
         })
         toast({ words: words.recorded({ number }) })
         onBack()

@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react'
+import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { formWords } from '../../../shared/messages/form.ts'
@@ -21,7 +21,7 @@ export function StopBathDialog({ item, onBack }: { item: TodayWork; onBack: () =
   const me = useMe()
   const client = useQueryClient()
   const toast = useToast()
-  const id = useRef(newId())
+  const [given] = useState(() => ({ id: newId(), happenedAt: new Date().toISOString() }))
   const [busy, setBusy] = useState(false)
   const [refused, setRefused] = useState<string>()
   const [seen, setSeen] = useState('')
@@ -32,15 +32,14 @@ export function StopBathDialog({ item, onBack }: { item: TodayWork; onBack: () =
     const fate = await enterAndSend(
       client,
       stopEntries.stopBath(me.id, enclosure, String(item.params['doseId']), {
-        id: id.current,
+        ...given,
         cause: 'stopped',
-        happenedAt: new Date().toISOString(),
         ...(typed === undefined ? {} : { seen: typed }),
       }),
       [[]],
     )
     setBusy(false)
-    if (fate === 'refused') return setRefused(refusalOf(id.current))
+    if (fate === 'refused') return setRefused(refusalOf(given.id))
     toast({ words: fate === 'kept' ? todayWords.stopKept : todayWords.stopped({ enclosure }) })
     onBack()
   }
