@@ -11,6 +11,7 @@ import { Handover1764600000016 } from './0016-handover.ts'
 import { LotLooks1764600000019 } from './0019-lot-looks.ts'
 import { AmountsSeen1764600000023 } from './0023-amounts-seen.ts'
 import { RecordRequests1764600000024 } from './0024-record-requests.ts'
+import { DoseVoids1764600000025 } from './0025-dose-voids.ts'
 import { Bodies1764600000026 } from './0026-bodies.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
@@ -29,5 +30,6 @@ export const migrations = [
   LotLooks1764600000019,
   AmountsSeen1764600000023,
   RecordRequests1764600000024,
+  DoseVoids1764600000025,
   Bodies1764600000026,
 ]

@@ -52,10 +52,22 @@ export const RecordedDose = z.object({
   by: z.string().describe('Who recorded it'),
   note: z.string().nullable().describe('In words'),
   exceptions: z.array(Caution).describe('What would have stopped or warned; for the veterinarian to review'),
+  struck: z
+    .object({
+      reason: z.string().describe('Why it was struck out'),
+      at: Instant.describe('When it was struck out'),
+      by: z.string().describe('Who struck it out'),
+    })
+    .nullable()
+    .describe('Struck out: it stays readable, and nothing rests on it; null while it stands'),
+  mayStrike: z.boolean().describe('The person who asks may strike it out now'),
   twice: z.boolean().describe('Another record of the same planned dose exists'),
   stop: z
     .object({
+      id: RecordId,
       at: Instant,
+      beforeStart: z.boolean().describe('Its time lies before that of the dose; one of the two is wrong'),
+      mayStrike: z.boolean().describe('The person who asks may strike it out now'),
       by: z.string().describe('Who stopped it'),
       cause: z.enum(['time-up', 'stopped']).describe('At its time, or before it'),
       seen: z.string().nullable().describe('What was seen'),
@@ -307,6 +319,22 @@ export const stopBath = contract({
   }),
   reply: { 201: BathSheet },
   problems: ['not-found', 'id-already-used'],
+})
+
+export const strikeDoseRecord = contract({
+  id: 'strikeDoseRecord',
+  method: 'post',
+  path: '/dose-records/:kind/:id/void',
+  action: 'dose.strike',
+  summary: 'Strike out the record of a dose or of its end; it stays readable with the reason',
+  params: z.strictObject({
+    kind: z.enum(['dose', 'stop']).describe('What is struck out'),
+    id: RecordId,
+  }),
+  body: z.strictObject({ reason: z.string().trim().min(3).max(2000).describe('Why') }),
+  reply: { 200: BathSheet },
+  problems: ['not-found', 'already-void', 'may-not'],
+  idempotent: 'by-key',
 })
 
 export const listDueDoses = contract({

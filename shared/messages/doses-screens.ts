@@ -121,6 +121,22 @@ export const sheetWords = defineMessages({
   record: 'Record what happened',
   print: 'Bath sheet on paper',
   records: 'Recorded',
+  struck: (p: { by: string; at: string }) => `Struck out by ${p.by}, ${p.at}.`,
+  struckReason: (p: { reason: string }) => `“${p.reason}”`,
+  stopBeforeStart:
+    'This end lies before the dose went in. One of the two times is wrong: strike it out and enter it anew.',
+  strikeDose: 'Strike out this record',
+  strikeStop: 'Strike out its end',
+  strikeDoseQuestion: 'Strike this record of a dose out?',
+  strikeStopQuestion: 'Strike the end of this bath out?',
+  strikeDoseBody:
+    'It stays readable with your reason. The dose counts as not recorded; the clocks of quarantine are told so.',
+  strikeStopBody:
+    'It stays in the audit trail with your reason. The bath then counts as not ended: enter its end anew.',
+  strikeReason: 'Why',
+  strikeAct: 'Strike it out',
+  strikeBack: 'Leave it',
+  strikeDone: 'It is struck out.',
   kindGiven: 'Given',
   kindRecorded: 'Recorded as given',
   kindWithheld: 'Withheld',
@@ -174,6 +190,8 @@ export const timerWords = defineMessages({
   endBody: 'Write down how it went; nothing of it is needed.',
   outBody: 'Write down how it was taken out.',
   stopAct: 'Stop it now',
+  beforeStart: (p: { at: string }) =>
+    `The dose went in at ${p.at}. Look at the time again; the stop is kept as you say all the same.`,
   endAct: 'Record the end',
   outAct: 'Record it',
   stopBack: 'Let it run',

@@ -32,6 +32,8 @@ export const doseWords = defineMessages({
   noLongerHere: (p: { animals: string }) => `${p.animals} (no longer in this water)`,
   allGone: (p: { animals: string }) =>
     `The animals of this order are not in this water any more: ${p.animals}. Give nothing. A veterinarian amends or discontinues the order.`,
+  strikeOwn:
+    'You may strike out your own record on its day. Later, and others’ records, a veterinarian does: quarantine and the next dose rest on it.',
   unexplained:
     'A dose of this order was recorded that does not fit it. A veterinarian looks at it and explains it first.',
   amountOff: 'Another amount was given than was worked out',

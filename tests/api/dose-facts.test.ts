@@ -1,10 +1,11 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse } from '../builders/a-bath.ts'
+import { aCase } from '../builders/a-case.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
 import { aSchool } from '../builders/an-order.ts'
 import { aPlace } from '../builders/a-collection.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
-import type { TestApi } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
 import { worklistOf } from '../support/worklist.ts'
 
 let api: TestApi
@@ -166,5 +167,99 @@ describe('an amount recorded as given', () => {
       [number],
     )
     expect(row.given_mg_per_l).toBeCloseTo(250, 6)
+  })
+})
+
+describe('a record of a dose that was a mistake', () => {
+  const strike = async (
+    kind: 'dose' | 'stop',
+    id: string,
+    by: TestPerson,
+    reason = 'typed on the wrong order',
+  ) => by.agent.post(`/api/dose-records/${kind}/${id}/void`).set('Idempotency-Key', newKey()).send({ reason })
+  const tomorrow = new Date('2026-12-02T18:20:00Z')
+
+  it('is struck out with a reason, stays readable, and nothing rests on it any more', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await house.freshWater(bath)
+    const id = api.nextId()
+    await house.record(number, { id, amount: { value: '2.18', unit: 'L' } }).expect(201)
+    const order = async () => (await house.technician.agent.get(`/api/orders/${number}`).expect(200)).body
+    expect(await order()).toMatchObject({ dosesGiven: 1 })
+    const struck = await strike('dose', id, house.technician)
+    expect(struck.status).toBe(200)
+    expect(struck.body).toMatchObject({
+      state: 'due',
+      recorded: [
+        {
+          id,
+          amountText: '2.18\u00a0L',
+          mayStrike: false,
+          struck: { reason: 'typed on the wrong order', by: 'Test technician' },
+        },
+      ],
+    })
+    expect(await order()).toMatchObject({ dosesGiven: 0 })
+    expect(await openOf(bath.school.accession)).toEqual([])
+    expect((await strike('dose', id, house.technician)).body.code).toBe('already-void')
+    // the dose can be given after all
+    await house.calculateFirst(number).expect(201)
+    await house.calculateSecond(bath, number).expect(201)
+    const given = await house.give(number).expect(201)
+    expect(given.body.recorded.map((one: { struck: unknown }) => one.struck !== null)).toEqual([false, true])
+  })
+
+  it('by whoever recorded it on its day, or a veterinarian; by nobody else', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const id = api.nextId()
+    await house.record(number, { id }).expect(201)
+    expect((await strike('dose', id, house.second)).status).toBe(403)
+    expect((await strike('dose', id, await api.as('registrar'))).status).toBe(403)
+    api.clock.set(tomorrow)
+    const late = await strike('dose', id, house.technician)
+    expect([late.status, late.body.code]).toEqual([403, 'may-not'])
+    expect(late.body.detail).toContain('a veterinarian does')
+    expect((await strike('dose', id, await api.as('veterinarian'))).status).toBe(200)
+    expect((await strike('stop', id, await api.as('veterinarian'))).status).toBe(404)
+  })
+
+  it('takes back what it told the clocks of quarantine', async () => {
+    const { tank } = await house.tankWithSchool()
+    const batch = await aCase(api, { enclosure: tank })
+    const events = async () =>
+      (
+        await api.composition.parts.dataSource.query(
+          `SELECT e.kind FROM live_case_events e JOIN quarantine_cases c ON c.id = e.case_id
+            WHERE c.number = $1 AND e.kind LIKE 'treatment%' ORDER BY e.happened_at, e.id`,
+          [batch.number],
+        )
+      ).map((row: { kind: string }) => row.kind)
+    const bath = { tank, school: batch.animal }
+    const number = await house.signedBath(bath)
+    const dose = api.nextId()
+    const stop = { id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:20:00Z' }
+    await house.record(number, { id: dose, happenedAt: '2026-12-01T17:35:00Z' }).expect(201)
+    await house.technician.agent.post(`/api/doses/${dose}/stop`).send(stop).expect(201)
+    expect(await events()).toEqual(['treatment-started', 'treatment-ended'])
+    // the end alone: the bath has not ended, its beginning stands
+    expect((await strike('stop', stop.id, house.technician)).body).toMatchObject({ state: 'running' })
+    expect(await events()).toEqual(['treatment-started'])
+    expect((await strike('dose', dose, house.technician)).status).toBe(200)
+    expect(await events()).toEqual([])
+  })
+
+  it('whose end lies before it is kept, and said so', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const dose = api.nextId()
+    await house.record(number, { id: dose }).expect(201)
+    const keeper = await api.as('keeper')
+    const stopped = await keeper.agent
+      .post(`/api/doses/${dose}/stop`)
+      .send({ id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T08:20:00Z' })
+      .expect(201)
+    expect(stopped.body.recorded[0].stop).toMatchObject({ beforeStart: true, mayStrike: true })
   })
 })

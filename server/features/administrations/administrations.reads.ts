@@ -19,7 +19,17 @@ export interface DoseReadRow {
   stop_cause: 'time-up' | 'stopped' | null
   stop_seen: string | null
   stop_rescue: string | null
+  stop_id: string | null
+  recorded_by: string
+  stop_recorded_at: Date | null
+  stop_recorded_by: string | null
+  struck_reason: string | null
+  struck_at: Date | null
+  struck_by: string | null
 }
+
+/** A record that stands: nobody struck it out. */
+export const stands = (row: DoseReadRow): boolean => row.struck_reason === null
 
 /** A record as the calendar of doses takes it. */
 export const recordOf = (row: DoseReadRow): DoseRecord => ({
@@ -28,7 +38,7 @@ export const recordOf = (row: DoseReadRow): DoseRecord => ({
   endedAt: row.stop_at?.toISOString() ?? null,
 })
 
-/** Every record of an order's doses, over all its versions, in time order. */
+/** Every record of an order's doses, over all its versions, in time order, struck-out ones with the reason. */
 export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
   return readDosesOf(db, [orderId])
 }
@@ -39,13 +49,17 @@ export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseRe
     `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note,
             d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
-            s.rescue AS stop_rescue
+            s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,
+            s.recorded_by AS stop_recorded_by, x.reason AS struck_reason, x.recorded_at AS struck_at,
+            y.printed_name AS struck_by
        FROM doses d
        JOIN order_versions v ON v.id = d.order_version_id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN product_lots t ON t.id = d.lot_id
-       LEFT JOIN LATERAL (SELECT * FROM bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
+       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
+       LEFT JOIN dose_voids x ON x.dose_id = d.id
+       LEFT JOIN people y ON y.id = x.recorded_by
       WHERE v.order_id = ANY($1::uuid[]) ORDER BY d.happened_at, d.recorded_at`,
     [orderIds],
   )

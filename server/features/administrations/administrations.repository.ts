@@ -1,6 +1,6 @@
 import { insertOnce } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
-import { BathStopRow, DoseCalculation, DoseRow } from './dose.entity.ts'
+import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 
 export function insertCalculation(tx: Tx, row: DoseCalculation): Promise<{ created: boolean }> {
   return insertOnce(tx, DoseCalculation, row, ['orderVersionId', 'doseKey', 'part', 'lotRead', 'recordedBy'])
@@ -12,6 +12,19 @@ export function insertDose(tx: Tx, row: DoseRow): Promise<{ created: boolean }> 
 
 export function findDose(tx: Tx, id: string): Promise<DoseRow | null> {
   return tx.manager.findOneBy(DoseRow, { id })
+}
+
+export function findStop(tx: Tx, id: string): Promise<BathStopRow | null> {
+  return tx.manager.findOneBy(BathStopRow, { id })
+}
+
+/** The void of a dose or of a stop; null while it stands. */
+export function findVoid(tx: Tx, of: { doseId: string } | { stopId: string }): Promise<DoseVoidRow | null> {
+  return tx.manager.findOneBy(DoseVoidRow, of)
+}
+
+export async function insertVoid(tx: Tx, row: DoseVoidRow): Promise<void> {
+  await tx.manager.insert(DoseVoidRow, row)
 }
 
 export function insertStop(tx: Tx, row: BathStopRow): Promise<{ created: boolean }> {

@@ -44,6 +44,10 @@ export function administrationRoutes(
       await service.recordDose(context, params.number, params.key, body)
       return queries.sheet(params.number, params.key, false, context)
     }),
+    route(contracts.strikeDoseRecord, async ({ params, body, context }) => {
+      const doseId = await service.strikeDoseRecord(context, params, body)
+      return queries.sheetOfDose(doseId, context)
+    }),
     route(contracts.stopBath, async ({ params, body, context }) => {
       await service.stopBath(context, params.doseId, body)
       return queries.sheetOfDose(params.doseId, context)

@@ -12,6 +12,7 @@ import * as repository from './administrations.repository.ts'
 import { createCalculations } from './calculations.service.ts'
 import { lockAndRead, personOf, refuseGiver, subjectOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
+import { createStrikes } from './strike.service.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
@@ -109,6 +110,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
 
   return {
     ...createCalculations(parts),
+    ...createStrikes(parts),
 
     /** Gives a dose: everything is judged again in this transaction, and anything in the way refuses it. */
     async giveDose(

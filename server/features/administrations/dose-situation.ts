@@ -18,7 +18,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Animals } from '../animals/index.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
-import { readDoses } from './administrations.reads.ts'
+import { readDoses, stands } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
 
 export interface DoseSituation {
@@ -33,8 +33,10 @@ export interface DoseSituation {
   enclosureIds: string[]
   /** Holds and ends of the order, the newest first. */
   events: EventReadRow[]
-  /** Every record of the order's doses, over all versions. */
+  /** Every record of the order's doses that stands, over all versions. */
   records: DoseReadRow[]
+  /** Those that were struck out. */
+  struck: DoseReadRow[]
   product: Product | null
   /** The order worked out again by the facts of the instant; null where the water cannot be read any more. */
   judgement: OrderJudgement | null
@@ -139,7 +141,8 @@ export async function readDoseSituation(
   const planned = plan.find((dose) => dose.key === key)
   if (!planned) throw new Problem('not-found', { detail: 'The order plans no such dose.' })
   const db = options.db ?? parts.dataSource
-  const records = await readDoses(db, sealed.row.id)
+  const all = await readDoses(db, sealed.row.id)
+  const records = all.filter(stands)
   const found = await parts.orders.judge({ ...fields, lotId: options.lotId ?? fields.lotId }, at, {
     db,
     exceptOrderId: sealed.row.id,
@@ -162,6 +165,7 @@ export async function readDoseSituation(
     enclosureIds: found?.situation.water.enclosures.map(({ id }) => id) ?? [fields.enclosureId],
     events: await parts.queries.events(sealed.row.id),
     records,
+    struck: all.filter((one) => !stands(one)),
     product: found?.product ?? null,
     judgement,
     answer:

@@ -27,12 +27,12 @@ export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
             d.amount_entered_unit, v.contact_minutes, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
             d.recorded_at, p.printed_name AS by_name, s.happened_at AS stop_at, s.cause AS stop_cause,
             s.seen AS stop_seen, q.printed_name AS stop_by
-       FROM doses d
+       FROM live_doses d
        JOIN order_versions v ON v.id = d.order_version_id
        JOIN orders o ON o.id = v.order_id
        JOIN enclosures c ON c.id = o.enclosure_id
        JOIN people p ON p.id = d.recorded_by
-       LEFT JOIN LATERAL (SELECT * FROM bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
+       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
       WHERE d.happened_at >= $1 OR d.recorded_at >= $1
          OR (v.contact_minutes IS NOT NULL AND d.kind IN ('given', 'recorded') AND s.id IS NULL)
@@ -66,7 +66,7 @@ export function readWantedSeconds(db: Db, since: Date): Promise<WantedSecondRow[
       WHERE f.part = 'first' AND f.recorded_at >= $1
         AND NOT EXISTS (SELECT 1 FROM order_versions n WHERE n.order_id = o.id AND n.version_no > v.version_no)
         AND NOT EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued')
-        AND NOT EXISTS (SELECT 1 FROM doses d WHERE d.order_version_id = v.id AND d.dose_key = f.dose_key)
+        AND NOT EXISTS (SELECT 1 FROM live_doses d WHERE d.order_version_id = v.id AND d.dose_key = f.dose_key)
         AND NOT EXISTS (SELECT 1 FROM dose_calculations l
                          WHERE l.order_version_id = v.id AND l.dose_key = f.dose_key
                            AND ((l.part = 'first' AND (l.recorded_at, l.id) > (f.recorded_at, f.id))

@@ -47,6 +47,17 @@ export class DoseRow {
   @Column({ type: 'uuid', name: 'recorded_by' }) recordedBy!: string
 }
 
+/** A record of a dose or of its end that was struck out with a reason; a ledger. */
+@Entity('dose_voids')
+export class DoseVoidRow {
+  @PrimaryColumn({ type: 'uuid' }) id!: string
+  @Column({ type: 'uuid', name: 'dose_id', nullable: true }) doseId!: string | null
+  @Column({ type: 'uuid', name: 'stop_id', nullable: true }) stopId!: string | null
+  @Column({ type: 'text' }) reason!: string
+  @Column({ type: 'timestamptz', name: 'recorded_at' }) recordedAt!: Date
+  @Column({ type: 'uuid', name: 'recorded_by' }) recordedBy!: string
+}
+
 /** The end of a bath, at its time or before; a ledger. */
 @Entity('bath_stops')
 export class BathStopRow {

@@ -5,7 +5,7 @@ import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { OpenOrder, OrderQueries } from '../orders/index.ts'
-import { readDosesOf, recordOf } from './administrations.reads.ts'
+import { readDosesOf, recordOf, stands } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
 
 type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
@@ -26,7 +26,7 @@ export async function findDueDoses(
   const until = query.until ?? addHours(now, aheadHours)
   const orders = known ?? (await parts.queries.open())
   const ids = orders.map(({ row }) => row.id)
-  const all = ids.length > 0 ? await readDosesOf(parts.dataSource, ids) : []
+  const all = ids.length > 0 ? (await readDosesOf(parts.dataSource, ids)).filter(stands) : []
   const byOrder = new Map<string, DoseReadRow[]>()
   for (const record of all) byOrder.set(record.order_id, [...(byOrder.get(record.order_id) ?? []), record])
   const found: DueDose[] = []

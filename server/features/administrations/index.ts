@@ -12,7 +12,7 @@ import { readCalculations, readOrderNumberOfDose, readSeenBy } from './administr
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
-import { BathStopRow, DoseCalculation, DoseRow } from './dose.entity.ts'
+import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
 import { presentSheet, showsAmountEarly } from './present-sheet.ts'
@@ -21,7 +21,7 @@ import type { Calculations } from './second-person.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
-export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow]
+export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow, DoseVoidRow]
 
 async function calculationsOf(db: Db, versionId: string, key: string): Promise<Calculations> {
   const all = await readCalculations(db, versionId, key)

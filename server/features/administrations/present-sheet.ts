@@ -8,6 +8,7 @@ import type { Action } from '../../../shared/domain/permissions/table.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { formatExpression } from '../../../shared/domain/quantities/format-expression.ts'
 import { formatWorkingValue } from '../../../shared/domain/quantities/format-working-value.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
@@ -34,7 +35,20 @@ export const saidForSheet = (caution: Caution, zone: string): SheetCaution => {
 const textOf = (value: string | null, unit: string | null) =>
   value === null || unit === null ? null : formatDose(value, unit as UnitCode).text
 
-export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[]): RecordedDose {
+/** Whether this person may strike a record out now: a slip of the hand on its day, or as a veterinarian. */
+function mayStrike(row: { recordedAt: Date; recordedBy: string }, { now, actor, zone }: Reader): boolean {
+  const dayOf = (at: string) => facilityDateOf(at, zone)
+  const isOwn = row.recordedBy === actor.personId && dayOf(row.recordedAt.toISOString()) === dayOf(now)
+  return decide('dose.strike', actor.roles, { 'own-record-of-the-day': isOwn }).allowed
+}
+
+interface Reader {
+  actor: Actor
+  zone: string
+  now: string
+}
+
+export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
   const happened = (one: DoseReadRow) => one.kind === 'given' || one.kind === 'recorded'
   return {
     id: row.id,
@@ -47,11 +61,32 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[]): Re
     by: row.by_name,
     note: row.note,
     exceptions: JSON.parse(row.exceptions_text) as RecordedDose['exceptions'],
+    struck:
+      (row.struck_reason !== null &&
+        row.struck_at && {
+          reason: row.struck_reason,
+          at: row.struck_at.toISOString(),
+          by: row.struck_by ?? '',
+        }) ||
+      null,
+    mayStrike:
+      row.struck_reason === null &&
+      mayStrike({ recordedAt: row.recorded_at, recordedBy: row.recorded_by }, reader),
     twice:
-      happened(row) && all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && happened(one)),
+      row.struck_reason === null &&
+      happened(row) &&
+      all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && happened(one)),
     stop: row.stop_at &&
       row.stop_cause && {
+        id: row.stop_id ?? '',
         at: row.stop_at.toISOString(),
+        beforeStart: row.stop_at < row.happened_at,
+        mayStrike:
+          row.struck_reason === null &&
+          mayStrike(
+            { recordedAt: row.stop_recorded_at ?? row.recorded_at, recordedBy: row.stop_recorded_by ?? '' },
+            reader,
+          ),
         by: row.stop_by ?? '',
         cause: row.stop_cause,
         seen: row.stop_seen,
@@ -234,7 +269,7 @@ export interface SheetRequest {
  * two agree: after a disagreement both begin again from the label, and the second is still blind.
  */
 export function presentSheet({ situation, calculations, blind, actor, now }: SheetRequest): BathSheet {
-  const { content, judgement, answer, drift, product, planned, records } = situation
+  const { content, judgement, answer, drift, product, planned, records, struck } = situation
   const { fields } = content
   const zone = judgement?.facts.zone ?? 'UTC'
   const dose = judgement?.dose ?? null
@@ -301,7 +336,9 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     secondShut: secondShut(calculations, actor),
     mayStart: why.length === 0,
     why,
-    recorded: own.map((record) => presentRecord(record, records)),
+    recorded: [...own, ...struck.filter((one) => one.dose_key === planned.key)].map((record) =>
+      presentRecord(record, records, { actor, zone, now }),
+    ),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
 }

@@ -28,6 +28,7 @@ export type { Accession, CountChange } from './accession.service.ts'
 export type { AnimalFacts, AnimalQuestions } from './animals.questions.ts'
 export type { AnimalsService } from './animals.service.ts'
 export type { LockSource } from './locks.service.ts'
+export { checkMayStrike } from './strikes.ts'
 export { verifyAnimals } from './verify-animals.ts'
 
 export const animalEntities = [

@@ -2,6 +2,7 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { Condition } from '../../../shared/domain/permissions/table.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -10,6 +11,7 @@ import type { RecordedFact } from './recorded-fact.entity.ts'
 const detailOf = {
   'death.strike': animalRefusals.strikeOwnDeath,
   'move.strike': animalRefusals.strikeOwnMove,
+  'dose.strike': doseWords.strikeOwn,
 }
 
 /**

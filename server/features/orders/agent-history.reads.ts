@@ -42,7 +42,7 @@ export function readAgentUses(
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2), '[]') AS given,
             (SELECT min(e.happened_at) FROM order_events e
               WHERE e.order_id = o.id AND e.kind = 'discontinued' AND e.happened_at <= $2) AS discontinued_at,
-            (SELECT max(d.happened_at) FROM doses d JOIN order_versions w ON w.id = d.order_version_id
+            (SELECT max(d.happened_at) FROM live_doses d JOIN order_versions w ON w.id = d.order_version_id
               WHERE w.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2) AS last_given_at
        FROM orders o
        JOIN order_versions v ON v.order_id = o.id
@@ -57,7 +57,7 @@ export function readAgentUses(
 export async function readGivenInLast24h(db: Db, enclosureIds: readonly string[], agent: string, at: Date) {
   const [row]: { total: number | null; unclear: string }[] = await db.query(
     `SELECT sum(d.given_mg_per_l) AS total, count(*) FILTER (WHERE d.given_mg_per_l IS NULL) AS unclear
-       FROM doses d JOIN order_versions v ON v.id = d.order_version_id
+       FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
       WHERE v.enclosure_id = ANY($1) AND v.agent = $2 AND d.kind IN ('given', 'recorded')
         AND d.happened_at <= $3 AND d.happened_at > $3 - interval '24 hours'`,
     [[...enclosureIds], agent, at],
@@ -68,7 +68,7 @@ export async function readGivenInLast24h(db: Db, enclosureIds: readonly string[]
 /** Taxa, of those asked about, in which this agent was given here before or experience was declared. */
 export async function readExperiencedTaxa(db: Db, agent: string, taxonIds: readonly string[], at: Date) {
   const rows: { taxon_id: string }[] = await db.query(
-    `SELECT a.taxon_id FROM doses d
+    `SELECT a.taxon_id FROM live_doses d
        JOIN order_versions v ON v.id = d.order_version_id
        JOIN order_version_animals a ON a.order_version_id = v.id
       WHERE v.agent = $1 AND a.taxon_id = ANY($2) AND d.kind IN ('given', 'recorded') AND d.happened_at <= $3

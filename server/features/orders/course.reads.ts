@@ -21,11 +21,11 @@ export async function readCourse(db: Db, orderId: string): Promise<CourseReadRow
   const [row]: CourseReadRow[] = await db.query(
     `SELECT o.number, v.agent, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
             EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS discontinued,
-            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
-                               (SELECT min(s.happened_at) FROM bath_stops s WHERE s.dose_id = d.id)))
-                        FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+                               (SELECT min(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id)))
+                        FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')), '[]') AS given
        FROM orders o
        JOIN order_versions v ON v.order_id = o.id

@@ -51,9 +51,9 @@ const columns = `
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
              ORDER BY e.recorded_at DESC, e.happened_at DESC LIMIT 1), false) AS held,
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
-  coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+  coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
              WHERE x.order_id = o.id), '{}') AS done_keys,
-  (SELECT count(*)::int FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+  (SELECT count(*)::int FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
     WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies`
 
@@ -147,7 +147,7 @@ export interface RecordedDoseRow {
 /** What was recorded of the planned doses, over all versions of an order, the newest first. */
 export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDoseRow[]> {
   return db.query(
-    `SELECT d.dose_key, d.kind, d.happened_at FROM doses d JOIN order_versions v ON v.id = d.order_version_id
+    `SELECT d.dose_key, d.kind, d.happened_at FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
       WHERE v.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
     [orderId],
   )

@@ -36,6 +36,10 @@ export function createCourseReporter(parts: { facility: FacilityService; treatme
     /** After anything that may have been the last of a course: a record of any kind, a stop, a discontinuation. */
     settle,
 
+    /** After a record was struck out: nothing that the clocks were told of the course stands; it is told anew. */
+    takenBack: (tx: Tx, given: { orderId: string; reason: string }): Promise<void> =>
+      parts.treatments.takenBack(tx, { courseId: given.orderId, reason: given.reason }),
+
     /** After a dose that went in. */
     async doseWentIn(
       tx: Tx,

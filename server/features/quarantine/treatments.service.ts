@@ -29,6 +29,21 @@ const endedIds = (rows: readonly TreatmentReadRow[]) =>
  */
 export function createTreatmentsService(parts: { ids: Ids; events: CaseEventsService }) {
   return {
+    /**
+     * A dose of the course was struck out: what its doses said to the clocks is voided with the reason. The doses that
+     * stand are told anew by whoever keeps them.
+     */
+    async takenBack(tx: Tx, given: { courseId: string; reason: string }): Promise<void> {
+      for (const row of (await readTreatments(tx.manager, given.courseId)).reverse())
+        await parts.events.recordEvent(tx, {
+          id: parts.ids.next(),
+          caseNumber: row.case_number,
+          happenedAt: tx.at.toISOString(),
+          facts: { kind: 'voided', voidsEventId: row.id },
+          reason: given.reason,
+        })
+    },
+
     /** A dose went in. A course that runs already for a case goes on; one that had ended begins anew. */
     async begun(tx: Tx, given: CourseBegun): Promise<void> {
       const { courseId, agent, at } = given

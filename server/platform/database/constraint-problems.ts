@@ -40,6 +40,8 @@ const byConstraint: Record<string, ProblemCode> = {
   uq_protocol_confirmations_version: 'already-confirmed',
   uq_case_events_cleared: 'case-ended',
   uq_case_events_void: 'already-void',
+  uq_dose_voids_dose: 'already-void',
+  uq_dose_voids_stop: 'already-void',
   uq_observation_bodies_observation: 'already-explained',
   uq_observation_voids_observation: 'already-void',
 }

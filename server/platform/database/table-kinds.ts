@@ -51,6 +51,7 @@ export const tableKinds: Record<string, TableKind> = {
   dose_amounts_seen: 'ledger',
   doses: 'ledger',
   bath_stops: 'ledger',
+  dose_voids: 'ledger',
   agent_experience: 'ledger',
   products: 'draft',
   product_lots: 'ledger',

@@ -80,6 +80,7 @@ export const permissions = {
   'case.hold': row('yes', 'yes', 'yes', 'no', 'no'),
   'dose.give': row('yes', 'yes', 'where-the-order-allows', 'no', 'no'),
   'dose.record': row('yes', 'yes', 'yes', 'no', 'no'),
+  'dose.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
   'dose.calculate-second': row('another-person', 'another-person', 'another-person', 'no', 'no'),
   'stock.manage': row('yes', 'yes', 'no', 'no', 'no'),
   'stock.controlled': row('yes', 'named-for-controlled-drugs', 'no', 'no', 'no'),

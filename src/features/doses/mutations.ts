@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import type { BodyOf, Contract } from '../../../shared/contracts/contract.ts'
+import type { BodyOf, Contract, ParamsOf } from '../../../shared/contracts/contract.ts'
 import * as doses from '../../../shared/contracts/doses.contract.ts'
 import { noteLotEvent } from '../../../shared/contracts/formulary.contract.ts'
 import { api } from '../../lib/api-client.ts'
@@ -43,6 +43,20 @@ export const useStopBath = () =>
     params: { doseId },
     body,
   }))
+
+export const useStrikeRecord = () =>
+  useTankAct(
+    doses.strikeDoseRecord,
+    ({
+      key,
+      reason,
+      ...params
+    }: ParamsOf<typeof doses.strikeDoseRecord> & { key: string; reason: string }) => ({
+      params,
+      body: { reason },
+      key,
+    }),
+  )
 
 export const useNoteLot = () =>
   useTankAct(noteLotEvent, ({ lotId, ...body }: BodyOf<typeof noteLotEvent> & { lotId: string }) => ({

@@ -1,9 +1,15 @@
+import { useState } from 'react'
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { newId } from '../../lib/new-id.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
+import { Button } from '../../ui/button.tsx'
 import { CautionBlock } from '../../ui/caution-block.tsx'
+import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { Tag } from '../../ui/tag.tsx'
+import { useToast } from '../../ui/toast-context.ts'
 import { DoseText } from '../orders/index.ts'
+import { useStrikeRecord } from './mutations.ts'
 
 const kindWords = (kind: RecordedDose['kind']) =>
   ({
@@ -33,9 +39,15 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
   const { stop } = record
   const wasLater = Date.parse(record.recordedAt) - Date.parse(record.happenedAt) > aMinuteMs
   return (
-    <article className="dose-record">
+    <article className={record.struck === null ? 'dose-record' : 'dose-record is-struck'}>
+      {record.struck === null ? null : (
+        <p>
+          <b>{words.struck({ by: record.struck.by, at: at(record.struck.at) })}</b>{' '}
+          {words.struckReason({ reason: record.struck.reason })}
+        </p>
+      )}
       <p className="row row-wrap">
-        <b>{kindWords(record.kind)}</b>
+        <b className="struck-text">{kindWords(record.kind)}</b>
         {record.amountText === null ? null : <DoseText text={record.amountText} size="strong" />}
         {record.lotNumber === null ? null : <span>{words.lotGiven({ lot: record.lotNumber })}</span>}
         {record.twice ? <Tag kind="late">{words.twice}</Tag> : null}
@@ -55,6 +67,7 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
                 ? words.outOfWater({ at: at(stop.at), by: stop.by })
                 : words.endedInTime({ at: at(stop.at), by: stop.by })}
           </p>
+          {stop.beforeStart ? <p className="t-strong text-magenta">{words.stopBeforeStart}</p> : null}
           {stop.seen === null ? null : <p>{words.seen({ seen: stop.seen })}</p>}
           {stop.rescue === null ? null : <p>{words.rescue({ rescue: stop.rescue })}</p>}
         </>
@@ -73,6 +86,45 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
           ))}
         </div>
       ) : null}
+      <StrikeActs record={record} />
     </article>
+  )
+}
+
+/** Strikes a record or its end out, for whoever may: with a reason, and it stays readable. */
+function StrikeActs({ record }: { record: RecordedDose }) {
+  const strike = useStrikeRecord()
+  const say = useToast()
+  const [asked, setAsked] = useState<{ kind: 'dose' | 'stop'; id: string; key: string } | null>(null)
+  const { stop } = record
+  if (!record.mayStrike && !stop?.mayStrike) return null
+  return (
+    <div className="row row-wrap">
+      {record.mayStrike ? (
+        <Button size="small" onClick={() => setAsked({ kind: 'dose', id: record.id, key: newId() })}>
+          {words.strikeDose}
+        </Button>
+      ) : null}
+      {stop?.mayStrike ? (
+        <Button size="small" onClick={() => setAsked({ kind: 'stop', id: stop.id, key: newId() })}>
+          {words.strikeStop}
+        </Button>
+      ) : null}
+      {asked === null ? null : (
+        <ReasonDialog
+          question={asked.kind === 'dose' ? words.strikeDoseQuestion : words.strikeStopQuestion}
+          body={asked.kind === 'dose' ? words.strikeDoseBody : words.strikeStopBody}
+          label={words.strikeReason}
+          act={words.strikeAct}
+          back={words.strikeBack}
+          onBack={() => setAsked(null)}
+          onAct={async (reason) => {
+            await strike.mutateAsync({ ...asked, reason })
+            setAsked(null)
+            say({ words: words.strikeDone })
+          }}
+        />
+      )}
+    </div>
   )
 }

@@ -41,7 +41,10 @@ export function openRecord(sheet: BathSheet): RecordedDose | null {
   return (
     [...sheet.recorded]
       .reverse()
-      .find(({ kind, stop }) => (kind === 'given' || kind === 'recorded') && stop === null) ?? null
+      .find(
+        ({ kind, stop, struck }) =>
+          (kind === 'given' || kind === 'recorded') && stop === null && struck === null,
+      ) ?? null
   )
 }
 

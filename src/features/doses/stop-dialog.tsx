@@ -4,6 +4,7 @@ import { sheetWords, timerWords as words } from '../../../shared/messages/doses-
 import { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
+import { sayMoment } from '../../lib/say-moment.ts'
 import { stopEntries } from '../../lib/stop-entries.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
@@ -24,6 +25,9 @@ const wordsOf = (kind: StopKind) =>
     out: { question: words.outQuestion, body: words.outBody, act: words.outAct, done: words.doneOut },
   })[kind]
 
+/** The field takes whole minutes: the minute of the start is not before it. */
+const toMinute = (instant: string) => Math.floor(Date.parse(instant) / 60_000) * 60_000
+
 /**
  * Ends a bath, with a signal or without: it is kept on the device first. Its time is the moment of the first press; no
  * password and no word is asked for.
@@ -31,6 +35,7 @@ const wordsOf = (kind: StopKind) =>
 export function StopDialog({
   doseId,
   label,
+  startedAt,
   kind,
   now,
   onBack,
@@ -38,6 +43,8 @@ export function StopDialog({
   doseId: string
   /** The enclosure, for the list of what is not sent yet. */
   label: string
+  /** When the dose went in. */
+  startedAt: string
   kind: StopKind
   /** The server's time at the press. */
   now: string
@@ -53,6 +60,9 @@ export function StopDialog({
   const [seen, setSeen] = useState('')
   const [rescue, setRescue] = useState('')
   const its = wordsOf(kind)
+  const isEarly = when.instant !== null && Date.parse(when.instant) < toMinute(startedAt)
+  const wrongTime =
+    when.missing ?? (isEarly ? words.beforeStart({ at: sayMoment(startedAt, when.zone, now) }) : undefined)
 
   const send = async () => {
     if (when.instant === null) return
@@ -121,7 +131,7 @@ export function StopDialog({
           value={rescue}
           onChange={(event) => setRescue(event.target.value)}
         />
-        <MomentField label={words.when} value={when.moment} onChange={when.setMoment} wrong={when.missing} />
+        <MomentField label={words.when} value={when.moment} onChange={when.setMoment} wrong={wrongTime} />
       </div>
     </Dialog>
   )

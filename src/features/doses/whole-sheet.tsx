@@ -139,6 +139,7 @@ export function WholeSheet({
         <StopDialog
           doseId={record.id}
           label={sheet.enclosureCode}
+          startedAt={record.happenedAt}
           kind={front.what}
           now={front.now}
           onBack={() => setFront(null)}

@@ -44,10 +44,23 @@ const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
   by: 'A',
   note: null,
   exceptions: [],
+  struck: null,
+  mayStrike: false,
   twice: false,
   stop: null,
   ...given,
 })
+
+const ended = {
+  id: 's1',
+  at: now,
+  beforeStart: false,
+  mayStrike: false,
+  by: 'A',
+  cause: 'time-up' as const,
+  seen: null,
+  rescue: null,
+}
 
 const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   number: 'TO-0001',
@@ -127,7 +140,7 @@ describe('the next act at the tank', () => {
     expect(nextAct(sheet({ first, second }))).toBe('resolve')
     expect(nextAct(sheet({ first, second, mayStart: true }))).toBe('give')
     expect(nextAct(sheet({ first, second, state: 'running', recorded: [record()] }))).toBe('running')
-    const over = record({ stop: { at: now, by: 'A', cause: 'time-up', seen: null, rescue: null } })
+    const over = record({ stop: ended })
     expect(nextAct(sheet({ state: 'done', recorded: [over] }))).toBe('done')
   })
   it('begins again after a disagreement, and waits again for the second person after that', () => {

@@ -1,0 +1,82 @@
+import type { BodyOf, ParamsOf } from '../../../shared/contracts/contract.ts'
+import type { strikeDoseRecord } from '../../../shared/contracts/doses.contract.ts'
+import type { Tx } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
+import { checkMayStrike } from '../animals/index.ts'
+import { readDoses, readOrderNumberOfDose, stands } from './administrations.reads.ts'
+import * as repository from './administrations.repository.ts'
+import { personOf } from './dose-context.ts'
+import type { AdministrationsParts } from './dose-context.ts'
+import type { DoseRow } from './dose.entity.ts'
+import { readDoseSituation } from './dose-situation.ts'
+
+const wentIn = ({ kind }: { kind: string }) => kind === 'given' || kind === 'recorded'
+
+/** Striking out what was recorded by mistake: the record stays with its reason, and nothing rests on it any more. */
+export function createStrikes(parts: AdministrationsParts) {
+  /** Clocks of quarantine rest on the doses: what they were told is voided, and told anew by the records that stand. */
+  async function tellClocksAnew(tx: Tx, orderId: string, number: string, reason: string): Promise<void> {
+    await parts.orders.course.takenBack(tx, { orderId, reason })
+    const standing = (await readDoses(tx.manager, orderId)).filter(stands).filter(wentIn)
+    for (const record of standing) {
+      const { enclosureIds } = await readDoseSituation(parts, number, record.dose_key, record.happened_at, {
+        db: tx.manager,
+      })
+      await parts.orders.course.doseWentIn(tx, { orderId, enclosureIds, at: record.happened_at })
+    }
+    await parts.orders.course.settle(tx, orderId)
+  }
+
+  async function locked(tx: Tx, doseId: string): Promise<{ dose: DoseRow; orderId: string; number: string }> {
+    const dose = await repository.findDose(tx, doseId)
+    const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
+    const named = orderId && (await readOrderNumberOfDose(tx.manager, doseId))
+    if (!dose || !orderId || !named) throw new Problem('not-found')
+    return { dose, orderId, number: named.number }
+  }
+
+  return {
+    /** @returns the dose whose record it was */
+    async strikeDoseRecord(
+      context: RequestContext,
+      { kind, id }: ParamsOf<typeof strikeDoseRecord>,
+      { reason }: BodyOf<typeof strikeDoseRecord>,
+    ): Promise<string> {
+      return parts.transactions.inTransaction(context, async (tx) => {
+        const stop = kind === 'stop' ? await repository.findStop(tx, id) : null
+        if (kind === 'stop' && !stop) throw new Problem('not-found')
+        const { dose, orderId, number } = await locked(tx, kind === 'dose' ? id : (stop?.doseId ?? id))
+        const row = stop ?? dose
+        if (await repository.findVoid(tx, stop ? { stopId: id } : { doseId: id }))
+          throw new Problem('already-void')
+        await checkMayStrike(parts, tx, 'dose.strike', row)
+        await repository.insertVoid(tx, {
+          id: parts.ids.next(),
+          doseId: stop ? null : id,
+          stopId: stop ? id : null,
+          reason,
+          recordedAt: tx.at,
+          recordedBy: personOf(tx),
+        })
+        tx.audit({
+          action: stop ? 'bath.strike-stop' : 'dose.strike',
+          subject: { kind: 'order', id: orderId, label: number },
+          before: {
+            key: dose.doseKey,
+            kind: stop ? stop.cause : dose.kind,
+            happenedAt: row.happenedAt.toISOString(),
+            ...(stop || dose.amountEnteredValue === null
+              ? {}
+              : { amount: { value: dose.amountEnteredValue, unit: dose.amountEnteredUnit } }),
+          },
+          after: { reason },
+          clinical: true,
+        })
+        if (!stop) await parts.animals.service.settleForDose(tx, id, reason)
+        await tellClocksAnew(tx, orderId, number, reason)
+        return dose.id
+      })
+    },
+  }
+}
