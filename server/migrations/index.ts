@@ -13,6 +13,7 @@ import { AmountsSeen1764600000023 } from './0023-amounts-seen.ts'
 import { RecordRequests1764600000024 } from './0024-record-requests.ts'
 import { DoseVoids1764600000025 } from './0025-dose-voids.ts'
 import { Bodies1764600000026 } from './0026-bodies.ts'
+import { PlainText1764600000029 } from './0029-plain-text.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -32,4 +33,5 @@ export const migrations = [
   RecordRequests1764600000024,
   DoseVoids1764600000025,
   Bodies1764600000026,
+  PlainText1764600000029,
 ]

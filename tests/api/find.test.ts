@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { ReplyOf } from '../../shared/contracts/contract.ts'
 import type { find } from '../../shared/contracts/find.contract.ts'
+import { plainText } from '../../shared/domain/plain-text.ts'
 import type { Role } from '../../shared/domain/permissions/roles.ts'
 import { aCase } from '../builders/a-case.ts'
 import { aGroup, aTaxon } from '../builders/a-collection.ts'
@@ -47,6 +48,31 @@ async function found(role: Role, q: string) {
 }
 
 describe('find', () => {
+  it('needs no accents and no capitals, and finds what is written with or without them', async () => {
+    await anEnclosure(api, 'OR-1', { name: 'Ångström épuration, Øst' })
+    const codes = async (q: string) =>
+      (await found('keeper', q)).flatMap(({ rows }) => rows.map(({ name }) => name)).join('; ')
+    for (const q of ['angstrom', 'ÅNGSTRÖM', 'A\u030angstrom', 'epuration', 'øst', 'OST'])
+      expect(await codes(q), q).toContain('OR-1')
+    // the database and the program take the same text for plain
+    for (const words of [
+      'Ångström',
+      'Señor Łoś',
+      'Æbelø œuf',
+      'İzmir ılık',
+      'Đà Nẵng',
+      'µg/L 5 %_\\',
+      'Straße',
+    ]) {
+      const [row]: { plain: string }[] = await api.composition.parts.dataSource.query(
+        `SELECT plain_text($1) AS plain`,
+        [words],
+      )
+      expect(row?.plain).toBe(plainText(words))
+    }
+    expect(await codes('ang%strom')).toBe('')
+  })
+
   it('finds a word in everything that the reader may see, and asks nothing else', async () => {
     const kinds = async (role: Role) => (await found(role, 'quella')).map(({ kind }) => kind)
     const everywhere = ['animal', 'enclosure', 'order', 'case', 'transaction', 'permit']

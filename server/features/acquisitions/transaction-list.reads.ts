@@ -61,11 +61,11 @@ const columns = `
             WHERE l.transaction_id = t.id ORDER BY l.position LIMIT 3) f) AS animals`
 
 const where = `
-  ($1::text IS NULL OR t.number ILIKE $1 OR t.reference ILIKE $1 OR c.name ILIKE $1 OR t.place ILIKE $1
+  ($1::text IS NULL OR plain_text(t.number) LIKE plain_text($1) OR plain_text(t.reference) LIKE plain_text($1) OR plain_text(c.name) LIKE plain_text($1) OR plain_text(t.place) LIKE plain_text($1)
     OR EXISTS (SELECT 1 FROM transaction_lines l JOIN animals a ON a.id = l.animal_id JOIN taxa x ON x.id = a.taxon_id
                 WHERE l.transaction_id = t.id
-                  AND (a.accession ILIKE $1 OR a.name ILIKE $1 OR x.common_name ILIKE $1
-                       OR x.scientific_name ILIKE $1)))
+                  AND (plain_text(a.accession) LIKE plain_text($1) OR plain_text(a.name) LIKE plain_text($1) OR plain_text(x.common_name) LIKE plain_text($1)
+                       OR plain_text(x.scientific_name) LIKE plain_text($1))))
   AND ($2::text IS NULL OR t.way = $2) AND ($3::text IS NULL OR t.kind = $3)
   AND ($4::boolean IS NULL OR o.voided = $4) AND (NOT $5::boolean OR (m.open_marks > 0 AND NOT o.voided))
   AND ($6::uuid IS NULL OR EXISTS (

@@ -136,9 +136,9 @@ export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<Animal
     const byMark = key
       ? `OR EXISTS (SELECT 1 FROM identifiers i WHERE i.animal_id = r.id AND i.value_key LIKE ${put(`%${key}%`)})`
       : ''
-    after.push(`(r.accession ILIKE ${like} OR r.name ILIKE ${like} OR r.common_name ILIKE ${like}
-      OR r.scientific_name ILIKE ${like} OR r.enclosure_code ILIKE ${like} OR r.enclosure_name ILIKE ${like}
-      OR r.enclosure_area ILIKE ${like} ${byMark})`)
+    after.push(`(plain_text(r.accession) LIKE plain_text(${like}) OR plain_text(r.name) LIKE plain_text(${like}) OR plain_text(r.common_name) LIKE plain_text(${like})
+      OR plain_text(r.scientific_name) LIKE plain_text(${like}) OR plain_text(r.enclosure_code) LIKE plain_text(${like}) OR plain_text(r.enclosure_name) LIKE plain_text(${like})
+      OR plain_text(r.enclosure_area) LIKE plain_text(${like}) ${byMark})`)
   }
   const direction = filter.direction === 'desc' ? 'DESC' : 'ASC'
   const order = sortColumns[filter.sort ?? 'accession']

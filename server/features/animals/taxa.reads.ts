@@ -80,7 +80,7 @@ export function readTaxa(db: Db, filter: TaxaFilter): Promise<TaxonReadRow[]> {
             count(*) OVER ()::int AS total
        FROM taxa t
       WHERE ($1::uuid[] IS NULL OR t.id = ANY ($1))
-        AND ($2::text IS NULL OR t.scientific_name ILIKE $2 OR t.common_name ILIKE $2)
+        AND ($2::text IS NULL OR plain_text(t.scientific_name) LIKE plain_text($2) OR plain_text(t.common_name) LIKE plain_text($2))
         AND ($3::text IS NULL OR t.taxon_group = $3) AND ($4::text IS NULL OR t.quarantine_kind = $4)
       ORDER BY ${sortColumns[filter.sort ?? 'commonName']} ${direction}, t.id LIMIT $5 OFFSET $6`,
     [

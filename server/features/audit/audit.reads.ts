@@ -44,7 +44,7 @@ export async function readAudit(
   ]
   const where = `
     ($1::uuid IS NULL OR a.actor_id = $1 OR ($2 AND a.clinical))
-    AND ($3::text IS NULL OR a.actor_name ILIKE $3 OR a.action ILIKE $3 OR a.subject_label ILIKE $3)
+    AND ($3::text IS NULL OR plain_text(a.actor_name) LIKE plain_text($3) OR plain_text(a.action) LIKE plain_text($3) OR plain_text(a.subject_label) LIKE plain_text($3))
     AND ($4::text IS NULL OR a.subject_kind = $4) AND ($5::text IS NULL OR a.subject_id = $5)`
   const rows: AuditRow[] = await db.query(
     `SELECT a.seq, a.happened_at, a.actor_id, a.actor_name, a.action, a.subject_kind, a.subject_label, a.clinical,

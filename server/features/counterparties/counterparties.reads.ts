@@ -39,7 +39,7 @@ export async function readCounterparties(
   db: Db,
   filter: CounterpartyFilter,
 ): Promise<{ rows: CounterpartyReadRow[]; total: number }> {
-  const where = `$1::text IS NULL OR c.name ILIKE $1 OR c.registration ILIKE $1 OR c.address ILIKE $1`
+  const where = `$1::text IS NULL OR plain_text(c.name) LIKE plain_text($1) OR plain_text(c.registration) LIKE plain_text($1) OR plain_text(c.address) LIKE plain_text($1)`
   const values = [containing(filter.q)]
   const column = filter.sort === 'transactions' ? 'transactions' : 'lower(c.name)'
   const order = `${column} ${filter.direction === 'desc' ? 'DESC' : 'ASC'}, c.id`

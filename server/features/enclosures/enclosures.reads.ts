@@ -54,7 +54,7 @@ const byCode = [`regexp_replace(e.code, '\\d+', '', 'g')`, 'length(e.code)', 'e.
 const orders = { code: byCode, name: ['lower(e.name)'], area: ['lower(e.area)', ...byCode] } as const
 
 const conditions = `
-  ($1::text IS NULL OR e.code ILIKE $1 OR e.name ILIKE $1 OR e.area ILIKE $1)
+  ($1::text IS NULL OR plain_text(e.code) LIKE plain_text($1) OR plain_text(e.name) LIKE plain_text($1) OR plain_text(e.area) LIKE plain_text($1))
   AND ($2::text IS NULL OR e.kind = $2)
   AND ($3::text IS NULL OR e.area = $3)
   AND ($4::text IS NULL OR e.boundary = $4)

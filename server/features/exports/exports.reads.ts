@@ -43,8 +43,8 @@ export async function readExports(
   filter: ExportFilter,
 ): Promise<{ rows: ExportReadRow[]; total: number }> {
   const where = `
-    ($1::text IS NULL OR x.subject_label ILIKE $1 OR x.reason ILIKE $1 OR p.printed_name ILIKE $1
-      OR x.file_name ILIKE $1)
+    ($1::text IS NULL OR plain_text(x.subject_label) LIKE plain_text($1) OR plain_text(x.reason) LIKE plain_text($1) OR plain_text(p.printed_name) LIKE plain_text($1)
+      OR plain_text(x.file_name) LIKE plain_text($1))
     AND ($2::uuid IS NULL OR x.subject_id = $2)`
   const values = [containing(filter.q), filter.animalId ?? null]
   const direction = filter.direction ?? (filter.sort === 'accession' ? 'asc' : 'desc')

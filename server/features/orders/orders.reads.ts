@@ -76,7 +76,7 @@ export function readOrders(db: Db, filter: OrderFilter): Promise<OrderReadRow[]>
   const like = containing(filter.q)
   return db.query(
     `SELECT ${columns} ${tables}
-      WHERE ($1::text IS NULL OR o.number ILIKE $1 OR c.code ILIKE $1 OR c.name ILIKE $1 OR v.agent ILIKE $1 OR f.agent ILIKE $1)
+      WHERE ($1::text IS NULL OR plain_text(o.number) LIKE plain_text($1) OR plain_text(c.code) LIKE plain_text($1) OR plain_text(c.name) LIKE plain_text($1) OR plain_text(v.agent) LIKE plain_text($1) OR plain_text(f.agent) LIKE plain_text($1))
         AND ($2::text IS NULL OR c.code = $2)
       ORDER BY o.number DESC`,
     [like, filter.enclosureCode ?? null],

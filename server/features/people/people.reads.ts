@@ -93,7 +93,7 @@ export async function readPeople(
   filter: PeopleFilter,
 ): Promise<{ rows: PersonReadRow[]; total: number }> {
   const where = `
-    ($1::text IS NULL OR p.printed_name ILIKE $1 OR p.email ILIKE $1)
+    ($1::text IS NULL OR plain_text(p.printed_name) LIKE plain_text($1) OR plain_text(p.email) LIKE plain_text($1))
     AND ($2::text IS NULL OR EXISTS (SELECT 1 FROM person_roles r
           WHERE r.person_id = p.id AND r.role = $2 AND r.withdrawn_at IS NULL))
     AND ($3::boolean IS NULL OR p.active = $3)`

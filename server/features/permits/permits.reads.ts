@@ -89,9 +89,9 @@ export async function readPermits(
   filter: PermitFilter,
 ): Promise<{ rows: PermitReadRow[]; total: number }> {
   const where = `
-    ($1::text IS NULL OR p.number ILIKE $1 OR p.permit_number ILIKE $1 OR p.authority ILIKE $1 OR c.name ILIKE $1
+    ($1::text IS NULL OR plain_text(p.number) LIKE plain_text($1) OR plain_text(p.permit_number) LIKE plain_text($1) OR plain_text(p.authority) LIKE plain_text($1) OR plain_text(c.name) LIKE plain_text($1)
       OR EXISTS (SELECT 1 FROM permit_taxa pt JOIN taxa t ON t.id = pt.taxon_id
-                  WHERE pt.permit_id = p.id AND (t.common_name ILIKE $1 OR t.scientific_name ILIKE $1)))
+                  WHERE pt.permit_id = p.id AND (plain_text(t.common_name) LIKE plain_text($1) OR plain_text(t.scientific_name) LIKE plain_text($1))))
     AND ($3::text IS NULL OR $3 = ${stateSql}) AND ($4::text IS NULL OR p.kind = $4)
     AND (NOT $5::boolean OR s.open_marks > 0) AND $2::date IS NOT NULL`
   const values = [containing(filter.q), on, filter.state ?? null, filter.kind ?? null, filter.open === 'yes']

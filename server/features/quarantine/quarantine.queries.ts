@@ -5,6 +5,7 @@ import type { CaseRow } from '../../../shared/contracts/quarantine-primitives.ts
 import type { ProtocolVersion } from '../../../shared/contracts/protocols.contract.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
+import { plainText } from '../../../shared/domain/plain-text.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
@@ -81,7 +82,7 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const work = await workOf(heads)
       const estimates = await estimatesOf(facts, heads)
       const all = heads.map((head) => presentCaseRow(facts, head, work, estimates))
-      const word = query.q?.toLowerCase()
+      const word = query.q === undefined ? '' : plainText(query.q)
       const found = all.filter(
         (row) =>
           isInView(row, view) &&
@@ -162,6 +163,6 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
   }
 }
 
-const wordsOf = (row: CaseRow) => [row.number, row.name, ...row.enclosures].join(' ').toLowerCase()
+const wordsOf = (row: CaseRow) => plainText([row.number, row.name, ...row.enclosures].join(' '))
 
 export type QuarantineQueries = ReturnType<typeof createQuarantineQueries>

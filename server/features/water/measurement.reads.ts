@@ -90,7 +90,7 @@ const readingConditions = `
   AND ($3::timestamptz IS NULL OR r.happened_at >= $3)
   AND ($4::timestamptz IS NULL OR r.happened_at < $4)
   AND ($5 OR v.id IS NULL)
-  AND ($6::text IS NULL OR r.instrument ILIKE $6 OR r.note ILIKE $6 OR p.printed_name ILIKE $6 OR r.parameter ILIKE $6)`
+  AND ($6::text IS NULL OR plain_text(r.instrument) LIKE plain_text($6) OR plain_text(r.note) LIKE plain_text($6) OR plain_text(p.printed_name) LIKE plain_text($6) OR plain_text(r.parameter) LIKE plain_text($6))`
 
 const readingValues = (waterBodyIds: readonly string[], filter: ReadingFilter) => [
   waterBodyIds,
