@@ -2,6 +2,7 @@ import type { z } from 'zod'
 import './plain-refusals.ts'
 import type { Action } from '../domain/permissions/table.ts'
 import type { ProblemCode } from './problems.ts'
+import './input-words.ts'
 
 type Method = 'get' | 'post' | 'put' | 'delete'
 

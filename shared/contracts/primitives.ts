@@ -7,6 +7,7 @@ import {
   lastPlausibleYear,
 } from '../domain/time/plausible-time.ts'
 import { roles } from '../domain/permissions/roles.ts'
+import './input-words.ts'
 
 function outsideYears(first: number): string {
   return `Check the year: it has to lie between ${String(first)} and ${String(lastPlausibleYear)}`

@@ -5,6 +5,5 @@ export const formWords = defineMessages({
   needed: 'Fill this in.',
   wholeNumber: 'Type a whole number.',
   number: 'Type a number, for example 44.62.',
-  tooLong: (p: { most: number }) => `Use at most ${String(p.most)} characters.`,
   sending: 'Sending',
 })

@@ -1,20 +1,9 @@
 import { get, set } from 'react-hook-form'
 import type { FieldErrors, FieldValues, Resolver } from 'react-hook-form'
 import type { z } from 'zod'
+// gives the faults of every schema their words
+import '../../shared/contracts/input-words.ts'
 import { formWords } from '../../shared/messages/form.ts'
-
-type Issue = z.core.$ZodIssue
-
-/** What is wrong with one field, in words for a person: an absent value is asked for, a number is asked for as one. */
-function says(issue: Issue, value: unknown): string {
-  if (value === undefined || value === null) return formWords.needed
-  if (typeof value === 'number' && Number.isNaN(value)) return formWords.number
-  if (typeof value === 'number' && !Number.isInteger(value) && issue.code === 'invalid_type')
-    return formWords.wholeNumber
-  if (issue.code === 'too_big' && typeof value === 'string')
-    return formWords.tooLong({ most: Number(issue.maximum) })
-  return issue.message
-}
 
 /**
  * Checks a form by the schema of the body that it will send, so that the form and the server ask for the same. Names in
@@ -37,7 +26,7 @@ export function bodyResolver<V extends FieldValues>(
     for (const issue of parsed.error?.issues ?? []) {
       const name = issue.path.map(String).join('.')
       if (get(errors, name)) continue
-      set(errors, name, { type: 'body', message: says(issue, get(body, name)) })
+      set(errors, name, { type: 'body', message: issue.message })
     }
     return { values: {}, errors }
   }

@@ -89,6 +89,50 @@ describe('contracts', () => {
     }
   })
 
+  // what people and programs send by mistake; every field of every contract gets all of them
+  const mistakes = [
+    undefined,
+    null,
+    '',
+    'x',
+    'x'.repeat(100_000),
+    '\u0000',
+    0,
+    -1,
+    1.5,
+    1e20,
+    Number.NaN,
+    true,
+    {},
+    { surprise: 1 },
+    [],
+    [1, 'x', {}],
+    new Date(0),
+  ]
+  const english = z.locales.en().localeError
+
+  it.each(allContracts.map((one) => [one.id, one] as const))(
+    '%s says what is wrong in plain words',
+    (_id, of) => {
+      for (const schema of [of.params, of.query, of.body]) {
+        if (!schema) continue
+        const fields = schema instanceof z.ZodObject ? Object.keys(schema.shape) : []
+        const given = [
+          ...mistakes,
+          ...fields.flatMap((field) => mistakes.map((value) => ({ [field]: value }))),
+        ]
+        for (const value of given)
+          for (const issue of schema.safeParse(value, { reportInput: true }).error?.issues ?? []) {
+            const own = english(issue as Parameters<typeof english>[0])
+            const sentence = typeof own === 'string' ? own : own?.message
+            expect(issue.message, `${issue.path.join('.')} ${issue.code}`).not.toBe(sentence)
+            expect(issue.message).not.toMatch(/\bInvalid\b|\bexpected\b|undefined|NaN/)
+            expect(issue.message.length).toBeGreaterThan(5)
+          }
+      }
+    },
+  )
+
   it('give every problem a title', () => {
     expect(Object.keys(problemTitles).sort()).toEqual(Object.keys(problemStatus).sort())
   })

@@ -16,7 +16,7 @@ export function fieldProblems(error: z.ZodError, root = ''): FieldProblem[] {
     if (issue.code === 'unrecognized_keys')
       return issue.keys.map((key) => ({
         pointer: `${pointer}/${key}`,
-        detail: 'This field is not known here',
+        detail: issue.message,
       }))
     return [{ pointer, detail: issue.message }]
   })
