@@ -6,4 +6,8 @@ export const formWords = defineMessages({
   wholeNumber: 'Type a whole number.',
   number: 'Type a number, for example 44.62.',
   sending: 'Sending',
+  leave: 'Leave without keeping it?',
+  leaveBody: 'What you typed since it was last kept is lost.',
+  leaveYes: 'Leave',
+  leaveNo: 'Go on writing',
 })

@@ -155,10 +155,6 @@ export const orderFormWords = defineMessages({
   staleSigned: 'The order was signed or ended meanwhile. What you typed is still here.',
   nothing: 'nothing',
 
-  leave: 'Leave without keeping it?',
-  leaveBody: 'What you typed since it was last kept is lost.',
-  leaveYes: 'Leave',
-  leaveNo: 'Go on writing',
   mayNotWrite: 'Orders are written by veterinarians and proposed by technicians.',
   ended: 'This order has ended and can’t be amended. Write a new one.',
 })

@@ -98,6 +98,11 @@ describe.each([desk, phone])('the registrar at $width px', (size) => {
     await page.getByLabel('Date', { exact: true }).fill('2026-12-01')
     await choose(page, /Other party/, 'ledder', /Ledder Bay/)
     await page.getByLabel(/Number on their paper/).fill('LA-26-04')
+    // one step back by mistake does not throw away what was typed
+    await page.evaluate(() => history.back())
+    await page.getByRole('alertdialog', { name: 'Leave without keeping it?' }).waitFor()
+    await page.getByRole('button', { name: 'Go on writing' }).click()
+    expect(await page.getByLabel(/Number on their paper/).inputValue()).toBe('LA-26-04')
     await choose(page, 'Taxon', 'sting', /Southern stingray/)
     await page.getByRole('radio', { name: 'Group', exact: true }).click()
     await page.getByLabel('Number alive').fill('24')

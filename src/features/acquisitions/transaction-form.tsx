@@ -9,9 +9,11 @@ import { listFaults } from '../../lib/form-faults.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { paperFaults } from '../documents/index.ts'
 import { faultLabel } from './fault-labels.ts'
 import { LinesFields } from './lines-fields.tsx'
@@ -53,7 +55,9 @@ export function TransactionForm({
   const acquire = useRecordAcquisition()
   const dispose = useRecordDisposition()
   const [general, setGeneral] = useState<string>()
-  const { errors, isSubmitting } = form.formState
+  const { errors, isSubmitting, isDirty } = form.formState
+  // while it is being sent, what follows may lead away
+  const { blocker } = useLeaveGuard(isDirty && !isSubmitting)
 
   const send = form.handleSubmit(async (values) => {
     setGeneral(undefined)
@@ -99,6 +103,7 @@ export function TransactionForm({
           </Button>
         </div>
       </form>
+      <LeaveQuestion blocker={blocker} />
     </FormProvider>
   )
 }

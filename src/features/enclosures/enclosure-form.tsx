@@ -4,6 +4,7 @@ import { enclosureKinds } from '../../../shared/domain/places/enclosure-kind.ts'
 import { enclosureFormWords, enclosureKindNames } from '../../../shared/messages/enclosures.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
@@ -14,6 +15,7 @@ import { TextField } from '../../ui/text-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { fieldOfPointer } from './enclosure-form-model.ts'
 import type { EnclosureFields } from './enclosure-form-model.ts'
 
@@ -43,7 +45,9 @@ export function EnclosureForm({
 }) {
   const form = useForm<EnclosureFields>({ defaultValues: start })
   const { register, control, watch, formState } = form
-  const { errors } = formState
+  const { errors, isDirty, isSubmitting } = formState
+  // while it is being sent, what follows may lead away
+  const { blocker } = useLeaveGuard(isDirty && !isSubmitting)
   const isVessel = watch('treatmentVessel')
 
   const send = form.handleSubmit(async (fields) => {
@@ -169,6 +173,7 @@ export function EnclosureForm({
             <ButtonLink to={backTo}>{enclosureFormWords.back}</ButtonLink>
           </div>
         </form>
+        <LeaveQuestion blocker={blocker} />
       </Area>
     </Sheet>
   )

@@ -13,12 +13,14 @@ import { bodyResolver } from '../../lib/body-resolver.ts'
 import { listFaults } from '../../lib/form-faults.ts'
 import { useMay } from '../../lib/may.ts'
 import { isProblem } from '../../lib/problem-error.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { everyTaxon, TaxonChooser } from '../animals/index.ts'
 import { PartyChooser } from '../counterparties/index.ts'
 import { useEnterPermit } from './mutations.ts'
@@ -45,7 +47,9 @@ export function PermitForm({ onEntered }: { onEntered: (permit: Permit) => void 
   const enter = useEnterPermit()
   const may = useMay('register.manage')
   const [general, setGeneral] = useState<string>()
-  const { errors, isSubmitting } = form.formState
+  const { errors, isSubmitting, isDirty } = form.formState
+  // while it is being sent, what follows may lead away
+  const { blocker } = useLeaveGuard(isDirty && !isSubmitting)
   const says = (name: keyof PermitValues) => errors[name]?.message
   const field = (name: keyof PermitValues) => ({ id: name, wrong: says(name), ...form.register(name) })
 
@@ -59,60 +63,63 @@ export function PermitForm({ onEntered }: { onEntered: (permit: Permit) => void 
     }
   })
   return (
-    <form className="stack gap-4 form-column" noValidate onSubmit={(event) => void send(event)}>
-      <WrongSummary
-        fields={listFaults(errors, (name) => labels[name as keyof PermitValues]?.() ?? name)}
-        general={general}
-      />
-      <TextField label={words.permitNumber} {...field('permitNumber')} />
-      <TextField label={words.authority} {...field('authority')} />
-      <SelectField
-        label={words.kind}
-        options={permitKinds.map((kind) => ({ value: kind, label: permitKindNames[kind] }))}
-        {...field('kind')}
-      />
-      <div className="pair">
-        <TextField label={words.validFrom} type="date" {...field('validFrom')} />
-        <TextField label={words.validUntil} type="date" {...field('validUntil')} />
-      </div>
-      <TextField
-        label={words.quantity}
-        hint={words.quantityHint}
-        optional
-        inputMode="numeric"
-        {...field('quantityAllowed')}
-      />
-      <Controller
-        control={form.control}
-        name="taxonIds"
-        render={({ field: taxa }) => (
-          <TaxaField value={taxa.value} wrong={says('taxonIds')} onChange={taxa.onChange} />
-        )}
-      />
-      <Controller
-        control={form.control}
-        name="counterpartyId"
-        render={({ field: party }) => (
-          <PartyChooser label={words.party} optional wrong={says('counterpartyId')} {...party} />
-        )}
-      />
-      <SelectField
-        label={words.purpose}
-        optional
-        options={purposeCodes.map((code) => ({ value: code, label: purposeCodeNames[code] }))}
-        {...field('purposeCode')}
-      />
-      <TextareaField label={words.conditions} optional {...field('conditions')} />
-      <div>
-        <Button
-          kind="primary"
-          type="submit"
-          shut={may.allowed ? isSubmitting && formWords.sending : words.mayNot}
-        >
-          {words.save}
-        </Button>
-      </div>
-    </form>
+    <>
+      <form className="stack gap-4 form-column" noValidate onSubmit={(event) => void send(event)}>
+        <WrongSummary
+          fields={listFaults(errors, (name) => labels[name as keyof PermitValues]?.() ?? name)}
+          general={general}
+        />
+        <TextField label={words.permitNumber} {...field('permitNumber')} />
+        <TextField label={words.authority} {...field('authority')} />
+        <SelectField
+          label={words.kind}
+          options={permitKinds.map((kind) => ({ value: kind, label: permitKindNames[kind] }))}
+          {...field('kind')}
+        />
+        <div className="pair">
+          <TextField label={words.validFrom} type="date" {...field('validFrom')} />
+          <TextField label={words.validUntil} type="date" {...field('validUntil')} />
+        </div>
+        <TextField
+          label={words.quantity}
+          hint={words.quantityHint}
+          optional
+          inputMode="numeric"
+          {...field('quantityAllowed')}
+        />
+        <Controller
+          control={form.control}
+          name="taxonIds"
+          render={({ field: taxa }) => (
+            <TaxaField value={taxa.value} wrong={says('taxonIds')} onChange={taxa.onChange} />
+          )}
+        />
+        <Controller
+          control={form.control}
+          name="counterpartyId"
+          render={({ field: party }) => (
+            <PartyChooser label={words.party} optional wrong={says('counterpartyId')} {...party} />
+          )}
+        />
+        <SelectField
+          label={words.purpose}
+          optional
+          options={purposeCodes.map((code) => ({ value: code, label: purposeCodeNames[code] }))}
+          {...field('purposeCode')}
+        />
+        <TextareaField label={words.conditions} optional {...field('conditions')} />
+        <div>
+          <Button
+            kind="primary"
+            type="submit"
+            shut={may.allowed ? isSubmitting && formWords.sending : words.mayNot}
+          >
+            {words.save}
+          </Button>
+        </div>
+      </form>
+      <LeaveQuestion blocker={blocker} />
+    </>
   )
 }
 

@@ -16,6 +16,7 @@ import { isProblem } from '../../lib/problem-error.ts'
 import { typedText } from '../../lib/typed-text.ts'
 import { useMoment } from '../../lib/use-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { ChoiceField } from '../../ui/choice-field.tsx'
@@ -25,6 +26,7 @@ import { Area, Sheet } from '../../ui/sheet.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { BatchAnimalChooser } from './batch-animal-chooser.tsx'
 import { EnclosureBatch } from './enclosure-batch.tsx'
 import { useOpenCase } from './mutations.ts'
@@ -70,6 +72,9 @@ export function OpenCaseForm() {
   const [complete, setComplete] = useState<'yes' | 'no' | null>(null)
   /** The case is open and its closing was refused: that is said here, and the way to the case. */
   const [halfDone, setHalfDone] = useState<{ number: string; says: string } | null>(null)
+  const { blocker, letGo } = useLeaveGuard(
+    halfDone === null && (name !== '' || protocolId !== '' || batch.length > 0),
+  )
   const offered = protocols.filter(({ current }) => current)
   const chosen = offered.find(({ id }) => id === protocolId)
 
@@ -111,6 +116,7 @@ export function OpenCaseForm() {
       await client.invalidateQueries({ queryKey: quarantineKey })
     }
     toast({ words: words.opened({ number }) })
+    letGo()
     await navigate(paths.quarantineCase(number))
   }
 
@@ -207,6 +213,7 @@ export function OpenCaseForm() {
           </form>
         )}
       </Area>
+      <LeaveQuestion blocker={blocker} />
     </Sheet>
   )
 }

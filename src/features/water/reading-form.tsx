@@ -10,6 +10,7 @@ import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { useMoment } from '../../lib/use-moment.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
@@ -21,6 +22,7 @@ import { TextField } from '../../ui/text-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { useRecordReadings } from './mutations.ts'
 import { parametersOf } from './parameter-order.ts'
 import { emptyField, entryUnitsOf, judgeField, pointerOf, readingsBody } from './reading-form-model.ts'
@@ -54,6 +56,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
   const change = (field: ReadingField, next: Partial<ReadingField>) =>
     setFields(fields.map((one) => (one === field ? { ...one, ...next } : one)))
   const filled = fields.filter((field) => field.value.trim() !== '')
+  const { blocker, letGo } = useLeaveGuard(filled.length > 0)
   const others = readingParameters.filter(
     (parameter) => !fields.some((field) => field.parameter === parameter),
   )
@@ -67,6 +70,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
     const done = await refusal.attempt(() => record.mutateAsync(body))
     if (!done) return
     say({ words: readingWords.saved({ count: body.readings.length, code }) })
+    letGo()
     void navigate(paths.enclosure(code))
   }
 
@@ -163,6 +167,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
           </div>
         </form>
       </Area>
+      <LeaveQuestion blocker={blocker} />
     </Sheet>
   )
 }

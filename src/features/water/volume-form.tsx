@@ -13,6 +13,7 @@ import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { useMoment } from '../../lib/use-moment.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
@@ -23,6 +24,7 @@ import { Area, Sheet } from '../../ui/sheet.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { MomentAndNote } from './moment-and-note.tsx'
 import { useDetermineVolume } from './mutations.ts'
 import { VolumeDrawing } from './volume-drawing.tsx'
@@ -60,11 +62,15 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
   const [nextCheckOn, setNextCheckOn] = useState('')
   const [note, setNote] = useState('')
   const [tried, setTried] = useState(false)
-  const [draft, setDraft] = useState<VolumeDraft>(() => {
-    const start = emptyDraft(water.bodies, treatmentVessel)
+  const [start] = useState<VolumeDraft>(() => {
+    const empty = emptyDraft(water.bodies, treatmentVessel)
     const earlier = water.volume.volume?.sheet as VolumeSheet | undefined
-    return earlier ? draftOfSheet(earlier, start) : start
+    return earlier ? draftOfSheet(earlier, empty) : empty
   })
+  const [draft, setDraft] = useState(start)
+  const { blocker, letGo } = useLeaveGuard(
+    note !== '' || nextCheckOn !== '' || JSON.stringify(draft) !== JSON.stringify(start),
+  )
   const lengthUnit = me.preferences['lengthUnit'] || 'm'
   const result = workOut(draft)
   const isolation = water.isolations.find((one) => one.id === isolationId)
@@ -95,6 +101,7 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
     )
     if (!done) return
     say({ words: volumeWords.saved })
+    letGo()
     void navigate(paths.enclosureVolumes(code))
   }
 
@@ -260,6 +267,7 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
           </div>
         </div>
       </Area>
+      <LeaveQuestion blocker={blocker} />
     </Sheet>
   )
 }

@@ -1,7 +1,7 @@
 import type { Blocker } from 'react-router-dom'
-import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
-import { Button } from '../../ui/button.tsx'
-import { Dialog } from '../../ui/dialog.tsx'
+import { formWords as words } from '../../shared/messages/form.ts'
+import { Button } from './button.tsx'
+import { Dialog } from './dialog.tsx'
 
 /** Asked before a form with unsaved text is left. */
 export function LeaveQuestion({ blocker }: { blocker: Blocker }) {
