@@ -82,13 +82,16 @@ export function createObservationQueries(parts: {
       const at = clock.now()
       const zone = await facility.zone()
       const on = facilityDateOf(at.toISOString(), zone)
-      const places = await parts.enclosures.questions.inUseAt(at)
+      const [places, facts, lastLooks] = await Promise.all([
+        parts.enclosures.questions.inUseAt(at),
+        readClocks(parts, db, 'running', { asOf: at, zone }),
+        readLastLooks(db, on),
+      ])
       const animals = await parts.animals.questions.animalsIn(
         places.map(({ id }) => id),
         at,
       )
-      const facts = await readClocks(parts, db, 'running', { asOf: at, zone })
-      const looks = new Map((await readLastLooks(db, on)).map((row) => [row.enclosure_id, row]))
+      const looks = new Map(lastLooks.map((row) => [row.enclosure_id, row]))
       const rows = places.flatMap((place): Round['rows'] => {
         const here = animals.filter(({ enclosureId }) => enclosureId === place.id)
         if (here.length === 0) return []

@@ -52,7 +52,8 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
 
   async function workOf(heads: readonly CaseReadRow[]): Promise<CaseWork> {
     const ids = heads.map(({ id }) => id)
-    return { stepRecords: await readStepRecords(db, ids), looks: await readLooks(db, ids) }
+    const [stepRecords, looks] = await Promise.all([readStepRecords(db, ids), readLooks(db, ids)])
+    return { stepRecords, looks }
   }
 
   /** Ranges of the groups in some batches that were last estimated. */
@@ -79,8 +80,7 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const view = query.view ?? 'running'
       const facts = await clocksOf('all', asOf)
       const heads = facts.cases.filter((head) => head.happened_at <= asOf)
-      const work = await workOf(heads)
-      const estimates = await estimatesOf(facts, heads)
+      const [work, estimates] = await Promise.all([workOf(heads), estimatesOf(facts, heads)])
       const all = heads.map((head) => presentCaseRow(facts, head, work, estimates))
       const word = query.q === undefined ? '' : plainText(query.q)
       const found = all.filter(

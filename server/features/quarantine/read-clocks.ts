@@ -8,6 +8,7 @@ import { nameInSentence } from '../../../shared/domain/taxa/name-in-sentence.ts'
 import type { Result } from '../../../shared/domain/result.ts'
 import type { Zone } from '../../../shared/domain/time/instant.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { readTogether } from '../../platform/database/read-together.ts'
 import type { WaterQuestions } from '../water/index.ts'
 import * as reads from './case-facts.reads.ts'
 import { clockEventsOf } from './clock-events.ts'
@@ -106,15 +107,27 @@ interface Component {
   stays: reads.BatchStayReadRow[]
   spells: SharedWaterSpell[]
   map: WaterMap
+  places: reads.PlaceReadRow[]
 }
 
 /** Which cases belong together because they shared water, with their batches and where these were. */
 async function readComponent(parts: ClockParts, db: Db, wanted: WantedCases, asOf: Date): Promise<Component> {
-  const allCases = await reads.readCases(db)
-  const allBatches = withParts(await reads.readMembers(db), await reads.readSplits(db))
+  const {
+    cases: allCases,
+    members,
+    splits,
+    map,
+    places,
+  } = await readTogether(db, {
+    cases: () => reads.readCases(db),
+    members: () => reads.readMembers(db),
+    splits: () => reads.readSplits(db),
+    map: () => parts.water.waterMap(db),
+    places: () => reads.readPlaces(db),
+  })
+  const allBatches = withParts(members, splits)
   const animalIds = [...new Set(allBatches.map((row) => row.animal_id))]
   const allStays = clip(allCases, allBatches, await reads.readStaysOf(db, animalIds))
-  const map = await parts.water.waterMap(db)
   const inWater = allStays.flatMap((stay) =>
     stay.water_body_id === null
       ? []
@@ -133,6 +146,7 @@ async function readComponent(parts: ClockParts, db: Db, wanted: WantedCases, asO
     stays: allStays.filter((row) => ids.has(row.case_id)),
     spells: spells.filter(({ caseIds }) => caseIds.some((id) => ids.has(id))),
     map,
+    places,
   }
 }
 
@@ -167,9 +181,8 @@ export async function readLockSet(parts: ClockParts, db: Db, caseId: string, asO
 /** Additions to these cases that the ledger of places shows. */
 async function readAdditions(
   db: Db,
-  { cases, stays, map }: Component,
+  { cases, stays, map, places }: Component,
   events: readonly reads.CaseEventReadRow[],
-  places: readonly reads.PlaceReadRow[],
 ): Promise<ClockEvent[]> {
   const forEntries = cases.map((one) => ({
     caseId: one.id,
@@ -232,21 +245,20 @@ export async function readClocks(
 ): Promise<ClockFacts> {
   const { asOf, zone } = given
   const component = await readComponent(parts, db, wanted, asOf)
-  const { cases, batches, stays } = component
+  const { cases, batches, stays, places } = component
   const animalIds = [...new Set(batches.map((row) => row.animal_id))]
-  const events = await reads.readCaseEvents(
-    db,
-    cases.map(({ id }) => id),
-  )
-  const deathRows = await reads.readDeathsOf(db, animalIds)
+  const caseIds = cases.map(({ id }) => id)
+  const { events, deathRows, countChanges } = await readTogether(db, {
+    events: () => reads.readCaseEvents(db, caseIds),
+    deathRows: () => reads.readDeathsOf(db, animalIds),
+    countChanges: () => reads.readCountChanges(db, animalIds),
+  })
   const deaths = batches.flatMap((row) =>
     deathRows
       .filter((death) => death.animal_id === row.animal_id && death.happened_at >= row.joined_at)
       .map((death) => ({ ...death, case_id: row.case_id })),
   )
-  const countChanges = await reads.readCountChanges(db, animalIds)
-  const places = await reads.readPlaces(db)
-  const additions = await readAdditions(db, component, events, places)
+  const additions = await readAdditions(db, component, events)
   const clocks = sound(
     computeClocks({
       cases: cases.map((one) => ({
