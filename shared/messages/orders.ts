@@ -51,6 +51,14 @@ export const volumeMethods = defineMessages({
 })
 
 /** Words of the printed order. */
+/** What became of a planned dose. */
+export const doseKindNames = defineMessages({
+  given: 'given',
+  recorded: 'recorded as given',
+  withheld: 'withheld',
+  refused: 'refused by the animals',
+})
+
 export const orderPaper = defineMessages({
   source: 'Volumes in litres. Amounts in grams or millilitres of product.',
   sourceMicrolitres: 'Volumes in litres. µL/L means microlitres of product per litre of water.',

@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aBathWater, aDraft, aProduct, aSchool, bathFields, signDraft } from '../builders/an-order.ts'
-import { pageCount, textOf } from '../pdf/support/poppler.ts'
+import { layoutOf, pageCount, textOf } from '../pdf/support/poppler.ts'
 import { newKey, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -89,6 +89,24 @@ describe('a printed order that is looked up', () => {
       .send({ reason: 'mounts clean' })
       .expect(200)
     expect(await check(hash)).toMatchObject({ state: 'discontinued', now: null })
+  })
+
+  it('has a box for the pen only at doses that nobody recorded', async () => {
+    const { number } = await aSigned({ doses: 2, intervalHours: 48 })
+    const { agent } = await api.as('technician')
+    await agent
+      .post(`/api/orders/${number}/doses/1/record`)
+      .send({
+        id: api.nextId(),
+        kind: 'recorded',
+        happenedAt: '2026-12-01T18:20:00Z',
+        amount: { value: '4.36', unit: 'g' },
+        lotId: fields.lotId,
+      })
+      .expect(201)
+    const table = layoutOf(await printed(`/api/orders/${number}/print`)).split(/Given\n/)[1] ?? ''
+    expect(table).toMatch(/^ *1 .*recorded as given +4\.36 g +1 Dec 2026, .*Test/m)
+    expect(table).toMatch(/^ *2 .* g +g *$/m)
   })
 
   it('comes out even where somebody wrote what the typeface lacks, spelled out', async () => {

@@ -1,5 +1,9 @@
 import { overrideOf } from '../../../shared/domain/orders/signed-answers.ts'
-import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
+import type {
+  DocumentBlock,
+  PdfDocumentModel,
+  TableCell,
+} from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
@@ -8,16 +12,19 @@ import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
-import { orderPaper, orderWords } from '../../../shared/messages/orders.ts'
+import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import type { SignedOrder } from './order-content.ts'
+import type { RecordedDoseRow } from './orders.reads.ts'
 
 export interface OrderPaper {
   content: SignedOrder
   block: SignatureBlock
   row: OrderRow
+  /** What is recorded of its doses, the newest first. */
+  recorded: readonly RecordedDoseRow[]
   superseded: boolean
   facility: string
   paper: 'a4' | 'letter'
@@ -164,9 +171,22 @@ function animalsBlock({ content }: OrderPaper): DocumentBlock {
   }
 }
 
-function givenBlock({ content, block }: OrderPaper): DocumentBlock {
+/** A dose that is recorded already has no box left for the pen: it might be given again. */
+function recordedCells(dose: RecordedDoseRow, zone: string): TableCell[] {
+  const { amount_entered_value: amount, amount_entered_unit: unit, ended_at } = dose
+  return [
+    doseKindNames[dose.kind],
+    amount === null || unit === null ? '' : formatDose(amount, unit as UnitCode).text,
+    sayInstant(dose.happened_at.toISOString(), zone),
+    ended_at === null ? '' : sayInstant(ended_at.toISOString(), zone),
+    dose.by_name ?? '',
+  ]
+}
+
+function givenBlock({ content, block, recorded }: OrderPaper): DocumentBlock {
   const { fields, amount } = content
   const unit = amount.measured?.unit ?? amount.unroundedUnit
+  const pen = true as const
   const planned = fields.startsAt
     ? plannedDoses(
         { startsAt: fields.startsAt, doses: fields.doses, intervalHours: fields.intervalHours },
@@ -185,15 +205,11 @@ function givenBlock({ content, block }: OrderPaper): DocumentBlock {
       { head: orderPaper.ended, share: 1.1 },
       { head: orderPaper.by, share: 1.4 },
     ],
-    rows: planned.map((dose) => [
-      dose.key,
-      sayInstant(dose.dueAt, block.zone),
-      { pen: true, unit },
-      { pen: true, unit },
-      { pen: true },
-      { pen: true },
-      { pen: true },
-    ]),
+    rows: planned.map(({ key, dueAt }) => {
+      const known = recorded.find((dose) => dose.dose_key === key)
+      const forThePen = [{ pen, unit }, { pen, unit }, { pen }, { pen }, { pen }]
+      return [key, sayInstant(dueAt, block.zone), ...(known ? recordedCells(known, block.zone) : forThePen)]
+    }),
     emptyText: orderWords.noVolume,
   }
 }

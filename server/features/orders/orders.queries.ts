@@ -157,6 +157,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const { content, block } = await readVersion(row, wanted)
       return {
         row: presentOrderRow(row, parts.now().toISOString()),
+        recorded: await readRecordedDoses(parts.dataSource, row.id),
         versionId: wanted.id,
         versionNo: wanted.version_no,
         superseded: wanted !== versions[0],

@@ -142,12 +142,21 @@ export interface RecordedDoseRow {
   dose_key: string
   kind: 'given' | 'recorded' | 'withheld' | 'refused'
   happened_at: Date
+  amount_entered_value: string | null
+  amount_entered_unit: string | null
+  by_name: string | null
+  ended_at: Date | null
 }
 
 /** What was recorded of the planned doses, over all versions of an order, the newest first. */
 export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDoseRow[]> {
   return db.query(
-    `SELECT d.dose_key, d.kind, d.happened_at FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
+    `SELECT d.dose_key, d.kind, d.happened_at, d.amount_entered_value, d.amount_entered_unit,
+            p.printed_name AS by_name,
+            (SELECT min(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at
+       FROM live_doses d
+       JOIN order_versions v ON v.id = d.order_version_id
+       LEFT JOIN people p ON p.id = d.recorded_by
       WHERE v.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
     [orderId],
   )

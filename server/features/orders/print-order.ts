@@ -32,6 +32,7 @@ export function createOrderPrinter(parts: PrintParts) {
       content: drawable(sealed.content),
       block: sealed.block,
       row: sealed.row,
+      recorded: sealed.recorded,
       superseded: sealed.superseded,
       facility: await parts.facility.valueOf('facility.name'),
       paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',

@@ -1,4 +1,5 @@
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
+import { doseKindNames } from '../../../shared/messages/orders.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
@@ -28,10 +29,10 @@ const standingWords = () => ({
   due: words.dueState,
   coming: words.comingState,
   past: words.pastState,
-  given: words.given,
-  recorded: words.recorded,
-  withheld: words.withheld,
-  refused: words.refused,
+  given: doseKindNames.given,
+  recorded: doseKindNames.recorded,
+  withheld: doseKindNames.withheld,
+  refused: doseKindNames.refused,
 })
 
 /** The planned doses with their windows and what became of them; each leads to its bath sheet. */
