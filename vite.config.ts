@@ -7,7 +7,12 @@ import react from '@vitejs/plugin-react'
 import tailwindcss from '@tailwindcss/vite'
 
 const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
-const withPostgres = { globalSetup: ['tests/support/postgres.ts'], pool: 'forks' as const }
+// each file has its own database, browser and folders: the server need not be loaded anew for each of them
+const withPostgres = {
+  globalSetup: ['tests/support/postgres.ts'],
+  pool: 'forks' as const,
+  isolate: false,
+}
 
 /** Nothing is painted before the script has set the person's light: a dark gallery must not flash white. */
 const paintAfterTheme: Plugin = {
@@ -71,6 +76,7 @@ export default defineConfig({
         test: {
           name: 'pure',
           environment: 'node',
+          isolate: false,
           include: files('domain', 'published-values', 'contracts', 'architecture', 'pdf', 'platform'),
           testTimeout: 60_000,
           hookTimeout: 60_000,
