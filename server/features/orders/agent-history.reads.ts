@@ -33,12 +33,12 @@ export function readAgentUses(
                  ELSE v.starts_at + (coalesce(v.interval_hours, 0) * (v.doses - 1)) * interval '1 hour'
                       + v.contact_minutes * interval '1 minute' END AS ends_at,
             v.doses, v.interval_hours, v.contact_minutes,
-            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.happened_at <= $2), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
-                               (SELECT min(s.happened_at) FROM bath_stops s
+                               (SELECT min(s.happened_at) FROM live_bath_stops s
                                  WHERE s.dose_id = d.id AND s.happened_at <= $2)))
-                        FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+                        FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2), '[]') AS given,
             (SELECT min(e.happened_at) FROM order_events e
               WHERE e.order_id = o.id AND e.kind = 'discontinued' AND e.happened_at <= $2) AS discontinued_at,
@@ -88,7 +88,7 @@ export async function readGivenBefore(
   if (orderId === null) return { doses: 0, lastAt: null }
   const [row]: { doses: number; last_at: Date | null }[] = await db.query(
     `SELECT count(DISTINCT d.dose_key)::int AS doses, max(d.happened_at) AS last_at
-       FROM doses d JOIN order_versions v ON v.id = d.order_version_id
+       FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
       WHERE v.order_id = $1 AND d.kind IN ('given', 'recorded')`,
     [orderId],
   )
