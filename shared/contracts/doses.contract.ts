@@ -232,6 +232,7 @@ export const calculateFirst = contract({
     'not-found',
     'may-not',
     'id-already-used',
+    'bad-input',
     'dose-not-possible',
     'working-disagrees',
     'broken-record',
@@ -281,7 +282,7 @@ export const giveDose = contract({
     note: z.string().trim().max(1000).optional().describe('In words'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'may-not', 'id-already-used', 'dose-not-possible', 'broken-record'],
+  problems: ['not-found', 'may-not', 'id-already-used', 'bad-input', 'dose-not-possible', 'broken-record'],
   idempotent: 'by-record-id',
 })
 
@@ -301,7 +302,7 @@ export const recordDose = contract({
     note: z.string().trim().max(1000).optional().describe('In words'),
   }),
   reply: { 201: BathSheet },
-  problems: ['not-found', 'id-already-used', 'in-the-future', 'broken-record'],
+  problems: ['not-found', 'id-already-used', 'bad-input', 'in-the-future', 'broken-record'],
   idempotent: 'by-record-id',
 })
 

@@ -146,7 +146,7 @@ export const noteLotEvent = contract({
     note: z.string().trim().max(500).optional().describe('In words'),
   }),
   reply: { 201: Product },
-  problems: ['not-found', 'id-already-used', 'in-the-future'],
+  problems: ['not-found', 'id-already-used', 'in-the-future', 'may-not', 'another-person-needed'],
   idempotent: 'by-record-id',
 })
 

@@ -349,6 +349,7 @@ export const signOrder = contract({
     'password-wrong',
     'sign-in-locked',
     'order-incomplete',
+    'bad-input',
     'dose-line-not-usable',
     'caution-stops',
     'caution-not-fired',

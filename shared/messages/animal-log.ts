@@ -53,6 +53,7 @@ export const discrepancyNames = defineMessages({
   'identifier-twice': 'one mark read on two animals.',
   'count-differs': 'a count that differs from the ledger.',
   'dose-amount-differs': 'another amount given than was signed and worked out.',
+  'dose-of-other-product': 'another product given than was ordered.',
   'dosed-in-absence': 'a dose recorded while it was not in that water.',
 } satisfies Record<DiscrepancyKind, string>)
 
@@ -92,6 +93,8 @@ export const discrepancySentences = defineMessages({
       : `${p.said('low')} to ${p.said('high')} were estimated, ${p.said('ledger')} are in the ledger.`,
   'dose-amount-differs': (p) =>
     `Dose ${p.said('key')} of ${p.said('order')}: ${p.said('given')} was recorded as given. Signed: ${p.said('signed')}. Worked out for the water then: ${p.said('workedOut')}.`,
+  'dose-of-other-product': (p) =>
+    `Dose ${p.said('key')} of ${p.said('order')}: lot ${p.said('lot')} was recorded, which is ${p.said('product')} and not what was ordered.`,
   'dosed-in-absence': (p) =>
     `Dose ${p.said('key')} of ${p.said('order')} was recorded as given in ${p.said('enclosure')}; by the register no animal of the order was in that water then.`,
 } satisfies Record<DiscrepancyKind, (p: Facts) => string>)

@@ -107,6 +107,7 @@ export const sheetWords = defineMessages({
   keptHold: 'The hold is kept on this device.',
   keptSheet: (p: { at: string }) =>
     `No signal. This is the bath as it was at ${p.at}; its time goes on by the clock of this device.`,
+  keptOther: (p: { at: string }) => `No signal. This sheet is as it was at ${p.at}.`,
   holdBlind: 'You can hold the order all the same: it is kept here and sent when there is a signal.',
   isHeld: 'Held: do not dose',
   isDiscontinued: 'Discontinued: do not dose',

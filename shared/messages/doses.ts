@@ -23,6 +23,9 @@ export const doseWords = defineMessages({
   secondOutdated: 'The lot or the volume has changed since the second calculation. Calculate again.',
   amountDiffers: (p: { amount: string }) =>
     `The amount has to be ${p.amount}, within one step of the balance.`,
+  otherProduct: 'The lot is of another product',
+  otherProductText: (p: { lot: string; product: string }) =>
+    `Lot ${p.lot} is ${p.product}, which is not what was ordered. A veterinarian reviews it.`,
   animalsGone: 'No animal of this order was in the water',
   animalsGoneText: (p: { animals: string }) =>
     `By the register none of them was in this water at that time: ${p.animals}. A veterinarian reviews it.`,

@@ -50,3 +50,12 @@ export const basisNames = defineMessages({
   free: 'as free ion',
   total: 'free and bound together',
 } satisfies Record<ConcentrationBasis, string>)
+
+/** Why a lot is not put back into use, or not used. */
+export const lotWords = defineMessages({
+  ownReturn: 'You took this lot out of use. Another person, or a veterinarian, puts it back.',
+  recalledReturn: 'A recalled lot is put back into use by a veterinarian only.',
+  unknown: 'There is no such lot. Choose one from the list, or leave it as not known.',
+  otherProduct: (p: { lot: string; product: string }) =>
+    `Lot ${p.lot} is of another product (${p.product}). Choose a lot of the product that is ordered.`,
+})

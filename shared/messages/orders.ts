@@ -4,6 +4,7 @@ import { counted, defineMessages } from './define-messages.ts'
 export const orderWords = defineMessages({
   order: 'Treatment order: bath',
   meaningAuthor: 'author of this order',
+  lotOfOther: 'The lot is not one of the product that is ordered. Choose a lot of this product, or none.',
   between: 'to',
   animalsCounted: (p: { count: number }) => counted(p.count, 'animal', 'animals'),
   animalsEstimated: (p: { low: number; high: number }) => `estimated ${String(p.low)} to ${String(p.high)}`,

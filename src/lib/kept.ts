@@ -10,8 +10,8 @@ export interface Kept<T> {
 }
 
 /** Keeps something on the device; a browser that refuses to keep anything is no hindrance. */
-export async function keep<T>(key: string, value: T): Promise<Kept<T>> {
-  const kept: Kept<T> = { value, at: new Date().toISOString(), old: false }
+export async function keep<T>(key: string, value: T, readAt = new Date()): Promise<Kept<T>> {
+  const kept: Kept<T> = { value, at: readAt.toISOString(), old: false }
   await inStore(keptStoreName, 'readwrite', (store) => store.put(kept, key)).catch(() => undefined)
   return kept
 }

@@ -2,7 +2,7 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse } from '../builders/a-bath.ts'
 import { aCase } from '../builders/a-case.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
-import { aSchool } from '../builders/an-order.ts'
+import { aProduct, aSchool } from '../builders/an-order.ts'
 import { aPlace } from '../builders/a-collection.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
@@ -261,5 +261,43 @@ describe('a record of a dose that was a mistake', () => {
       .send({ id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T08:20:00Z' })
       .expect(201)
     expect(stopped.body.recorded[0].stop).toMatchObject({ beforeStart: true, mayStrike: true })
+  })
+})
+
+describe('a lot of another product', () => {
+  it('is neither prepared nor given nor signed; recorded as given it is kept, marked and explained', async () => {
+    const bath = await house.tankWithSchool()
+    const other = await aProduct(api, {})
+    const number = await house.signedBath(bath)
+    const sentence = 'Lot PZ-0317 is of another product (Praziquantel powder).'
+    const first = await house.technician.agent
+      .post(house.doseAt(number, '/first-calculation'))
+      .send({ id: api.nextId(), lotId: other.lotId })
+    expect([first.status, first.body.errors[0].pointer]).toEqual([422, '/lotId'])
+    expect(first.body.errors[0].detail).toContain(sentence)
+    const given = await house.give(number, { lotId: other.lotId })
+    expect([given.status, given.body.errors[0].code]).toEqual([422, 'lot-of-other-product'])
+
+    const recorded = await house.record(number, { lotId: other.lotId }).expect(201)
+    expect(codesOf(recorded)).toContain('other-product')
+    expect(await openOf(bath.school.accession)).toMatchObject([{ kind: 'dose-of-other-product' }])
+    await expect(house.signedBath(bath, { lotId: other.lotId })).rejects.toThrow('lot-of-other-product')
+  })
+
+  it('that nobody has is refused with what to do, not as a fault of the house', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const nobodys = { lotId: api.nextId() }
+    for (const reply of [
+      await house.record(number, nobodys),
+      await house.give(number, nobodys),
+      await house.technician.agent
+        .post(house.doseAt(number, '/first-calculation'))
+        .send({ id: api.nextId(), ...nobodys }),
+    ]) {
+      expect([reply.status, reply.body.code]).toEqual([422, 'bad-input'])
+      expect(reply.body.errors[0].detail).toContain('There is no such lot.')
+    }
+    await expect(house.signedBath(bath, nobodys)).rejects.toThrow('lot-of-other-product')
   })
 })

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { defaultDoseLines } from '../../shared/domain/formulary/default-dose-lines.ts'
-import { newKey, startApi } from '../support/api.ts'
-import type { TestApi } from '../support/api.ts'
+import { newKey, startApi, testDay } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
 
 let api: TestApi
 beforeAll(async () => {
@@ -133,8 +133,33 @@ describe('the formulary', () => {
       state: 'stored-cold',
       foundClearAt: '2026-11-20T16:00:00.000Z',
     })
-    const back = await note('returned-to-use', '2026-11-21T10:00:00-04:00').expect(201)
+    // nobody puts back alone what they took out
+    const alone = await note('returned-to-use', '2026-11-21T10:00:00-04:00')
+    expect([alone.status, alone.body.code]).toEqual([403, 'another-person-needed'])
+    const other = await api.person({
+      email: 'tech2@harrow-point.example',
+      printedName: 'Second technician',
+      roles: ['technician'],
+    })
+    const noteBy = (by: TestPerson, kind: string, happenedAt: string) =>
+      by.agent.post(`/api/lots/${lotId}/events`).send({ id: api.nextId(), kind, happenedAt })
+    const back = await noteBy(other, 'returned-to-use', '2026-11-21T10:00:00-04:00').expect(201)
     expect(states(back.body.lots)[2]).toBe('A3 usable')
+
+    // a recall that is entered late stands, nothing noted beside it hides it, and only a veterinarian lifts it
+    api.clock.set(new Date(testDay.getTime() + 1_000))
+    const recalled = await note('recalled', '2026-11-20T09:00:00-04:00').expect(201)
+    expect(states(recalled.body.lots)[2]).toBe('A3 recalled')
+    expect(states((await note('set-aside', '2026-11-30T09:00:00-04:00').expect(201)).body.lots)[2]).toBe(
+      'A3 recalled',
+    )
+    const refused = await noteBy(other, 'returned-to-use', '2026-12-01T10:00:00-04:00')
+    expect([refused.status, refused.body.code]).toEqual([403, 'may-not'])
+    expect(refused.body.detail).toBe('A recalled lot is put back into use by a veterinarian only.')
+    const vet = await api.as('veterinarian')
+    api.clock.set(new Date(testDay.getTime() + 2_000))
+    const lifted = await noteBy(vet, 'returned-to-use', '2026-12-01T10:00:00-04:00').expect(201)
+    expect(states(lifted.body.lots)[2]).toBe('A3 usable')
     expect((await note('recalled', '2026-12-02T10:00:00-04:00').expect(422)).body.code).toBe('in-the-future')
   })
 })

@@ -16,6 +16,8 @@ import { createStrikes } from './strike.service.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
+import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
+import type { LotNamed } from './lot-of-order.ts'
 import { isAmountNow, obstacles } from './judge-dose.ts'
 import { firstOf, secondOf } from './second-person.ts'
 import { concentrationGiven, exceptionsOf, judgeAmount } from './judge-record.ts'
@@ -34,7 +36,8 @@ export function createAdministrationsService(parts: AdministrationsParts) {
   async function writeDose(tx: Tx, situation: DoseSituation, given: DoseToWrite): Promise<void> {
     const happened = given.kind === 'given' || given.kind === 'recorded'
     const isFact = given.kind === 'recorded'
-    const exceptions = isFact ? exceptionsOf(situation, given) : []
+    const lot = given.lotId === null ? null : await readLotNamed(tx, situation, given.lotId)
+    const exceptions = isFact ? exceptionsOf(situation, { ...given, lot }) : []
     const times = {
       happenedAt: given.happenedAt,
       happenedOn: await parts.facility.dateOf(given.happenedAt, tx),
@@ -75,21 +78,21 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         at: given.happenedAt,
       })
     await parts.orders.course.settle(tx, situation.row.id)
-    if (isFact) await openDiscrepancies(tx, situation, given, times)
+    if (isFact) await openDiscrepancies(tx, situation, { ...given, lot }, times)
   }
 
   /** What does not fit the order is explained by a veterinarian, and locks the next dose and clearance until then. */
   async function openDiscrepancies(
     tx: Tx,
     situation: DoseSituation,
-    given: DoseToWrite,
+    given: DoseToWrite & { lot: LotNamed | null },
     times: FactTimes,
   ): Promise<void> {
     const { treated, content, planned } = situation
     const facts = { dose: given.id, order: content.number, key: planned.key }
     const here = treated.filter(({ isHere }) => isHere !== false)
     const open = (
-      kind: 'dose-amount-differs' | 'dosed-in-absence',
+      kind: 'dose-amount-differs' | 'dosed-in-absence' | 'dose-of-other-product',
       animals: readonly { animalId: string }[],
       more: Record<string, string>,
     ) =>
@@ -100,10 +103,15 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         facts: { ...facts, ...more },
         times,
       })
+    const affected = here.length > 0 ? here : treated
+    if (given.lot && !given.lot.isOrdered) {
+      const { lotNumber, productName } = given.lot
+      await open('dose-of-other-product', affected, { lot: lotNumber, product: productName })
+    }
     const amount = given.amount && judgeAmount(situation, given.amount)
     if (amount && !amount.fits) {
       const { given: what, signed, workedOut } = amount
-      await open('dose-amount-differs', here.length > 0 ? here : treated, { given: what, signed, workedOut })
+      await open('dose-amount-differs', affected, { given: what, signed, workedOut })
     }
     if (goneOf(situation).all) await open('dosed-in-absence', treated, { enclosure: content.enclosure.code })
   }
@@ -127,6 +135,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
         if (situation.block.state !== 'intact')
           throw new Problem('broken-record', { detail: doseWords.notIntact })
+        await refuseOtherLot(tx, situation, given.lotId)
         const calculations = await parts.calculations(situation.versionId, key, tx)
         const why = obstacles(situation, calculations)
         const measured = situation.judgement?.dose?.measured

@@ -13,6 +13,7 @@ import type { AdministrationsParts } from './dose-context.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered, strengthEntered } from './entered-amounts.ts'
+import { refuseOtherLot } from './lot-of-order.ts'
 import { firstOf, secondRefusal, secondShut } from './second-person.ts'
 
 const allowedDrift = ({ content }: DoseSituation) => content.fields.allowedVolumeDriftPercent
@@ -48,6 +49,7 @@ export function createCalculations(parts: AdministrationsParts) {
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
         refuseBroken(situation)
+        await refuseOtherLot(tx, situation, given.lotId)
         const gone = goneOf(situation)
         if (gone.all)
           throw new Problem('dose-not-possible', {

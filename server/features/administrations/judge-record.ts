@@ -7,6 +7,7 @@ import { doseWords } from '../../../shared/messages/doses.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { divisionOf } from './judge-dose.ts'
+import type { LotNamed } from './lot-of-order.ts'
 import { saidForSheet } from './present-sheet.ts'
 
 export interface Exception {
@@ -79,7 +80,7 @@ function sayTimes(times: number | null): string {
 /** What a record of a dose that was given breaks: kept with it, for the veterinarian. Nothing here refuses it. */
 export function exceptionsOf(
   situation: DoseSituation,
-  given: { happenedAt: Date; amount: Quantity | null },
+  given: { happenedAt: Date; amount: Quantity | null; lot: LotNamed | null },
 ): Exception[] {
   const { judgement, block, row, drift } = situation
   const zone = judgement?.facts.zone ?? 'UTC'
@@ -95,6 +96,13 @@ export function exceptionsOf(
       'stop',
       doseWords.amountOff,
       [doseWords.amountOffText(amount), sayTimes(amount.times)].filter(Boolean).join(' '),
+    )
+  if (given.lot && !given.lot.isOrdered)
+    mark(
+      'other-product',
+      'stop',
+      doseWords.otherProduct,
+      doseWords.otherProductText({ lot: given.lot.lotNumber, product: given.lot.productName }),
     )
   const gone = goneOf(situation)
   const animals = gone.names.join('; ')

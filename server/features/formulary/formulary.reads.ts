@@ -62,11 +62,25 @@ export interface LotReadRow {
   lot_number: string
   expires_on: string
   received_on: string
-  /** What happened to it last; null when nothing did. */
+  /** What keeps it out of use; null when nothing does. */
   last_event: string | null
   /** When somebody last looked at it and found it clear; ISO 8601. */
   found_clear_at: string | null
 }
+
+/**
+ * What keeps lots out of use: everything noted since somebody put them back, whatever its own time. A recall that is
+ * entered late stands as well.
+ */
+export const standingLotEvents = `
+  SELECT e.id, e.lot_id, e.kind, e.happened_at, e.recorded_by FROM lot_events e
+   WHERE e.kind NOT IN ('looked-at', 'returned-to-use')
+     AND NOT EXISTS (SELECT 1 FROM lot_events r
+                      WHERE r.lot_id = e.lot_id AND r.kind = 'returned-to-use'
+                        AND (r.recorded_at, r.happened_at) > (e.recorded_at, e.happened_at))`
+
+/** A recall stands over everything that is noted beside it. */
+const gravestFirst = `ORDER BY (e.kind = 'recalled') DESC, e.happened_at DESC`
 
 /** Products with their lots, all of them or one. */
 export function readProducts(db: Db, id?: string): Promise<ProductReadRow[]> {
@@ -76,9 +90,8 @@ export function readProducts(db: Db, id?: string): Promise<ProductReadRow[]> {
             coalesce((SELECT json_agg(json_build_object(
                                'id', t.id, 'lot_number', t.lot_number, 'expires_on', t.expires_on,
                                'received_on', t.received_on,
-                               'last_event', (SELECT e.kind FROM lot_events e
-                                               WHERE e.lot_id = t.id AND e.kind <> 'looked-at'
-                                               ORDER BY e.happened_at DESC, e.recorded_at DESC LIMIT 1),
+                               'last_event', (SELECT e.kind FROM (${standingLotEvents}) e
+                                               WHERE e.lot_id = t.id ${gravestFirst} LIMIT 1),
                                'found_clear_at', (SELECT max(e.happened_at) FROM lot_events e
                                                    WHERE e.lot_id = t.id AND e.kind = 'looked-at'))
                              ORDER BY t.expires_on, t.lot_number)

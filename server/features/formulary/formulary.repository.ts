@@ -1,3 +1,4 @@
+import { standingLotEvents } from './formulary.reads.ts'
 import { insertOnce, updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { DoseLineConfirmation, DoseLineRow, LotEventRow, LotRow, ProductRow } from './formulary.entity.ts'
@@ -34,6 +35,20 @@ export function findLot(tx: Tx, id: string): Promise<LotRow | null> {
 
 export function insertLotEvent(tx: Tx, row: LotEventRow) {
   return insertOnce(tx, LotEventRow, row, ['lotId', 'kind', 'happenedAt', 'note'])
+}
+
+/** What keeps a lot out of use, and who noted it. */
+export function findStandingEvents(
+  tx: Tx,
+  lotId: string,
+): Promise<{ kind: string; recorded_by: string | null }[]> {
+  return tx.manager.query(`SELECT e.kind, e.recorded_by FROM (${standingLotEvents}) e WHERE e.lot_id = $1`, [
+    lotId,
+  ])
+}
+
+export function hasLotEvent(tx: Tx, id: string): Promise<boolean> {
+  return tx.manager.existsBy(LotEventRow, { id })
 }
 
 export function findDoseLine(tx: Tx, id: string): Promise<DoseLineRow | null> {

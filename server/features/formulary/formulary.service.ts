@@ -1,7 +1,8 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/formulary.contract.ts'
 import { defaultDoseLines } from '../../../shared/domain/formulary/default-dose-lines.ts'
-import { agentNames } from '../../../shared/messages/formulary.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { agentNames, lotWords } from '../../../shared/messages/formulary.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Ids } from '../../platform/ids.ts'
 import { timeNotAhead } from '../../platform/http/check-time.ts'
@@ -45,6 +46,17 @@ export function createFormularyService(parts: FormularyParts) {
     const lot = await repository.findLot(tx, lotId)
     if (!lot) throw new Problem('not-found')
     return lot
+  }
+
+  /** Nobody puts a lot back into use alone: another person than who took it out, and a recalled one a veterinarian. */
+  async function checkReturn(tx: Tx, lotId: string): Promise<void> {
+    const standing = await repository.findStandingEvents(tx, lotId)
+    const isRecalled = standing.some(({ kind }) => kind === 'recalled')
+    const isAnother = standing.every((event) => event.recorded_by !== tx.actor.personId)
+    if (decide('lot.return', tx.actor.roles, { 'another-person': isAnother && !isRecalled }).allowed) return
+    throw new Problem(isRecalled ? 'may-not' : 'another-person-needed', {
+      detail: isRecalled ? lotWords.recalledReturn : lotWords.ownReturn,
+    })
   }
 
   return {
@@ -126,6 +138,8 @@ export function createFormularyService(parts: FormularyParts) {
       const happenedAt = timeNotAhead(given.happenedAt, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const lot = await productOfLot(tx, lotId)
+        if (given.kind === 'returned-to-use' && !(await repository.hasLotEvent(tx, given.id)))
+          await checkReturn(tx, lotId)
         const { created } = await repository.insertLotEvent(tx, {
           id: given.id,
           lotId,

@@ -6,6 +6,7 @@ import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { timeByNow } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -205,6 +206,8 @@ export function createOrdersService(parts: OrdersParts) {
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
         const volume = situation.water.volume
+        if (product && fields.lotId !== null && !product.lots.some(({ id }) => id === fields.lotId))
+          throw refusedInput('/fields/lotId', orderWords.lotOfOther, 'lot-of-other-product')
         if (!judgement?.dose || !judgement.dose.measured || !product || !volume || fields.startsAt === null)
           throw new Problem('order-incomplete', { detail: 'The amount cannot be worked out yet.' })
         const verified = await verifyWorking(judgement.dose.working)

@@ -9,6 +9,7 @@
  * - `identifier-twice`    one mark read on two animals
  * - `count-differs`       a count made differs from the ledger
  * - `dose-amount-differs` another amount went into its water than was signed and worked out
+ * - `dose-of-other-product` a lot of another product was recorded than the one ordered
  * - `dosed-in-absence`    a dose was recorded for it at a time at which it was not in that water
  */
 export const discrepancyKinds = {
@@ -20,6 +21,7 @@ export const discrepancyKinds = {
   'identifier-twice': 'registrar',
   'count-differs': 'registrar',
   'dose-amount-differs': 'veterinarian',
+  'dose-of-other-product': 'veterinarian',
   'dosed-in-absence': 'veterinarian',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
 

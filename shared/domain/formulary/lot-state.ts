@@ -7,7 +7,7 @@ export type LotState =
  * Whether a lot may be used on a day, and if not, why.
  *
  * @param expiresOn last day of use, itself included
- * @param lastEvent what happened to the lot last; `returned-to-use` ends an earlier event
+ * @param lastEvent the gravest of what keeps it out of use; null once somebody has put it back
  * @param on        facility date
  */
 export function lotState(expiresOn: FacilityDate, lastEvent: string | null, on: FacilityDate): LotState {

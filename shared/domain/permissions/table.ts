@@ -83,6 +83,7 @@ export const permissions = {
   'dose.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
   'dose.calculate-second': row('another-person', 'another-person', 'another-person', 'no', 'no'),
   'stock.manage': row('yes', 'yes', 'no', 'no', 'no'),
+  'lot.return': row('yes', 'another-person', 'no', 'no', 'no'),
   'stock.controlled': row('yes', 'named-for-controlled-drugs', 'no', 'no', 'no'),
   'discharge.record': row('yes', 'yes', 'hygiene-only', 'no', 'no'),
   'observation.record': row('yes', 'yes', 'yes', 'no', 'no'),

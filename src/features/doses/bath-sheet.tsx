@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react'
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, useQueryClient } from '@tanstack/react-query'
 import { Navigate } from 'react-router-dom'
 import type { UseQueryResult } from '@tanstack/react-query'
 import type { BathSheet as BathSheetReply } from '../../../shared/contracts/doses.contract.ts'
@@ -32,7 +32,7 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   const { zone } = useMe().facility
   const blind = useQuery({
     ...sheetQuery(number, doseKey, true),
-    refetchInterval: ({ state }) => (looksAgain(state.data, state.error !== null) ? lookAgainMs : false),
+    refetchInterval: ({ state }) => (looksAgain(state.data, state.error) ? lookAgainMs : false),
   })
   const mode = blind.data ? sheetMode(blind.data, part) : null
   const whole = useQuery({
@@ -42,9 +42,11 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   })
   const query = mode === 'whole' ? whole : blind
   const running = query.data?.state === 'running' ? query.data : null
+  const receivedMs = query.dataUpdatedAt
   useEffect(() => {
-    if (running) void keepRunning(running)
-  }, [running])
+    if (running) void keepRunning(running, receivedMs)
+  }, [running, receivedMs])
+  useKeptRunning(number, doseKey, isUnanswered(blind.error) && !blind.data)
   if (!query.data) return <NotYet number={number} query={query} doseKey={doseKey} />
   if (mode === 'blind') return <BlindSheet sheet={query.data} zone={zone} />
   return (
@@ -52,15 +54,31 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
       key={`${number} ${doseKey}`}
       sheet={query.data}
       zone={zone}
-      receivedMs={query.dataUpdatedAt}
+      receivedMs={receivedMs}
+      isKept={isUnanswered(query.error)}
       onLookAgain={() => void query.refetch()}
     />
   )
 }
 
+const isUnanswered = (error: Error | null) => isProblem(error) && error.noAnswer
+
+/** When nobody answers at the start, the bath that runs stands as it was kept, and goes on from there. */
+function useKeptRunning(number: string, doseKey: string, wanted: boolean): void {
+  const client = useQueryClient()
+  const { data: kept } = useQuery({ ...keptRunningQuery(number, doseKey), enabled: wanted })
+  useEffect(() => {
+    if (wanted && kept)
+      client.setQueryData(sheetQuery(number, doseKey, true).queryKey, kept.value, {
+        updatedAt: Date.parse(kept.at),
+      })
+  }, [client, number, doseKey, wanted, kept])
+}
+
 /** Whether the sheet is read again by itself: somebody else may act on it, or nobody answered. */
-function looksAgain(sheet: BathSheetReply | undefined, failed: boolean): boolean {
-  if (failed || sheet === undefined) return failed
+function looksAgain(sheet: BathSheetReply | undefined, error: Error | null): boolean {
+  if (isUnanswered(error)) return true
+  if (sheet === undefined) return false
   return waitsForOthers(sheet) || (!sheet.blind && othersMayAct(sheet))
 }
 
@@ -112,8 +130,11 @@ function NotYet({
 }) {
   const problem = isProblem(query.error) ? query.error : null
   const missing = problem?.code === 'not-found' || problem?.code === 'bad-input'
-  if (problem?.noAnswer && doseKey !== null)
-    return <WithoutAnswer number={number} doseKey={doseKey} onRetry={() => void query.refetch()} />
+  // while it is asked again, what stands stays: somebody may be stopping the bath
+  const [unanswered, setUnanswered] = useState(false)
+  if (problem && problem.noAnswer !== unanswered) setUnanswered(problem.noAnswer)
+  if (unanswered && doseKey !== null)
+    return <WithoutAnswer number={number} onRetry={() => void query.refetch()} />
   return (
     <PhoneSheet
       back={{ to: paths.order(number), label: words.backToOrder({ number }) }}
@@ -134,31 +155,12 @@ function NotYet({
   )
 }
 
-/** Nobody answers: the bath that runs as it was kept, else nothing but the hold, which needs no answer. */
-function WithoutAnswer({
-  number,
-  doseKey,
-  onRetry,
-}: {
-  number: string
-  doseKey: string
-  onRetry: () => void
-}) {
+/** Nobody answers, and no running bath was kept: nothing but the hold, which needs no answer. */
+function WithoutAnswer({ number, onRetry }: { number: string; onRetry: () => void }) {
   const { zone } = useMe().facility
   const hold = useMay('order.hold')
-  const kept = useQuery(keptRunningQuery(number, doseKey))
   const [holdAt, setHoldAt] = useState<string | null>(null)
   const now = new Date().toISOString()
-  if (kept.data)
-    return (
-      <WholeSheet
-        sheet={kept.data.value}
-        zone={zone}
-        receivedMs={Date.parse(kept.data.at)}
-        isKept
-        onLookAgain={onRetry}
-      />
-    )
   return (
     <>
       <PhoneSheet

@@ -20,9 +20,13 @@ export const sheetQuery = (number: string, key: string, blind: boolean) =>
 
 const runningKey = (number: string, key: string) => `running bath ${number} ${key}`
 
-/** A bath that runs is kept on the device: it is timed and stopped without a signal too. */
-export async function keepRunning(sheet: BathSheet): Promise<void> {
-  await keep(runningKey(sheet.number, sheet.key), sheet)
+/**
+ * A bath that runs is kept on the device: it is timed and stopped without a signal too.
+ *
+ * @param receivedMs when the server sent it, by the device's clock: the time of the bath is told by that
+ */
+export async function keepRunning(sheet: BathSheet, receivedMs: number): Promise<void> {
+  await keep(runningKey(sheet.number, sheet.key), sheet, new Date(receivedMs))
 }
 
 /** The running bath as it was when the server last answered; null where none was kept. */

@@ -48,7 +48,7 @@ export function WholeSheet({
   sheet: BathSheet
   zone: string
   receivedMs: number
-  /** Nobody answers, and it stands as it was kept. */
+  /** Nobody answers, and it stands as it was. */
   isKept?: boolean
   onLookAgain: () => void
 }) {
@@ -58,6 +58,7 @@ export function WholeSheet({
   const act = nextAct(sheet)
   const record = openRecord(sheet)
   const running = act === 'running' && record !== null
+  const keptWords = running ? words.keptSheet : words.keptOther
   const ask = (what: Front['what']) =>
     setFront({ what, now: new Date(Date.now() + serverOffsetMs(sheet.now, receivedMs)).toISOString() })
   const isFootEmpty = (act === 'done' || act === 'closed') && !mayHold(sheet)
@@ -93,7 +94,7 @@ export function WholeSheet({
         }
       >
         {isKept ? (
-          <Banner icon={WifiOff}>{words.keptSheet({ at: sayMoment(sheet.now, zone, sheet.now) })}</Banner>
+          <Banner icon={WifiOff}>{keptWords({ at: sayMoment(sheet.now, zone, sheet.now) })}</Banner>
         ) : null}
         <UnsentActs number={sheet.number} doseId={record?.id ?? null} zone={zone} now={sheet.now} />
         <Standing sheet={sheet} zone={zone} />
