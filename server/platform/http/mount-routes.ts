@@ -76,18 +76,18 @@ function parseCall(of: Contract, req: Request) {
  * The record that a request carries, with a hash of what was sent for it. How it came is no part of the content: an
  * entry that is sent again from an outbox is the same entry. A file is compared by its own hash where it is stored.
  */
-function recordOf(of: Contract, req: Request, { actor }: RequestContext): RecordRequest | null {
+function recordOf(of: Contract, req: Request): RecordRequest | null {
   const body: unknown = req.body
   if (typeof body !== 'object' || body === null || !('id' in body) || typeof body.id !== 'string') return null
   const { origin: _, ...content } = body as Record<string, Json>
-  const contentHash = hashOf(canonicalJson({ params: req.params as Json, by: actor.personId, content }))
+  const contentHash = hashOf(canonicalJson({ params: req.params as Json, content }))
   return { id: body.id, contractId: of.id, contentHash }
 }
 
 function contextOf(of: Contract, req: Request, person: SignedIn | null, content: unknown): RequestContext {
   const context: RequestContext = { actor: person ?? installation, requestId: requestIdOf(req) }
   if (of.idempotent === 'by-record-id') {
-    const record = recordOf(of, req, context)
+    const record = recordOf(of, req)
     return record ? { ...context, record } : context
   }
   if (of.idempotent !== 'by-key') return context
