@@ -145,4 +145,22 @@ describe('the ordinary bundle', () => {
     expect(scripts.size).toBeGreaterThan(1)
     expect(packed).toBeLessThan(150_000)
   })
+
+  it('loads at most 185 kB of script, packed, for Today of somebody signed in, whatever their roles', async () => {
+    const client = path.join(root, 'dist/client')
+    const text = await readFile(path.join(client, '.vite/manifest.json'), 'utf8')
+    const manifest = JSON.parse(text) as Record<string, { file: string; imports?: string[] }>
+    const files = new Set<string>()
+    const take = (key: string): void => {
+      const chunk = manifest[key]
+      if (!chunk) throw new Error(`${key} is not in the build`)
+      if (files.has(chunk.file)) return
+      files.add(chunk.file)
+      chunk.imports?.forEach(take)
+    }
+    for (const key of ['index.html', 'src/app/shell/frame.tsx', 'src/app/routes/today.tsx']) take(key)
+    let packed = 0
+    for (const file of files) packed += gzipSync(await readFile(path.join(client, file))).length
+    expect(packed).toBeLessThan(185_000)
+  })
 })
