@@ -316,6 +316,21 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await page.getByText(/can still be recorded/).waitFor()
     expect(await page.getByRole('button', { name: 'Work it out with this lot' }).count()).toBe(0)
     await expectSound(page, 'bath-held-390')
+
+    // ten times too much is kept and marked; a slip of the hand is struck out and stays readable
+    await page.getByRole('button', { name: 'Record what happened' }).click()
+    await dialog.getByRole('radio', { name: 'It was given' }).click()
+    await dialog.getByRole('textbox', { name: 'How much was given' }).fill('2180')
+    await dialog.getByRole('button', { name: 'Record it' }).click()
+    await page.getByText('Another amount was given than was worked out').waitFor()
+    await page.getByText(/That is about 10 times as much/).waitFor()
+    await expectSound(page, 'bath-tenfold-390')
+    await page.getByRole('button', { name: 'Strike out this record' }).click()
+    await page.getByRole('textbox', { name: 'Why' }).fill('typed one digit too many')
+    await page.getByRole('button', { name: 'Strike it out' }).click()
+    await page.getByText(/^Struck out by Test keeper/).waitFor()
+    await page.getByText('“typed one digit too many”').waitFor()
+    await expectSound(page, 'bath-struck-390')
   })
 
   it('of an agent left in the water asks when it is out, from which quarantine counts', async () => {
