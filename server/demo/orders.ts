@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../shared/contracts/order-primitives.ts'
 import type { Composition } from '../composition.ts'
 import { saidCautions } from '../features/orders/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { doseStates } from '../domain/orders/dose-states.ts'
 import { contract } from './contract.ts'
-import { OrderNumber } from './orders.contract.ts'
+import { OrderNumber } from './order-primitives.ts'
 import { EnteredQuantity, Instant, LocalDate, May, RecordId } from './primitives.ts'
 import { actAddresses } from './today.addresses.ts'
 

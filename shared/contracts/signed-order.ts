@@ -6,7 +6,7 @@ import {
   SaidCaution,
   SaidCondition,
   SaidLine,
-} from './orders.contract.ts'
+} from './order-primitives.ts'
 import { EnteredQuantity } from './primitives.ts'
 
 /** Orders signed earlier name the rule alone. */

@@ -14,8 +14,8 @@ import {
 } from '../builders/an-order.ts'
 import { localMomentOf } from '../../src/lib/local-moment.ts'
 import { password } from '../support/api.ts'
-import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
+import { expectSound, picture, signIn } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -129,30 +129,8 @@ const phone = { width: 390, height: 844, expectedErrors }
 /** A date and time so many hours from now, as the facility's clock shows it. */
 const localIn = (hours: number) => localMomentOf(hoursFromNow(hours), 'America/Halifax')
 
-const picture = async (page: Page, name: string) => {
-  const folder = process.env['PRATIQUE_PICTURES']
-  if (folder) await page.screenshot({ path: `${folder}/${name}.png`, fullPage: true })
-}
-
-async function signedIn(email: string, size: typeof desk, at: string): Promise<Page> {
-  const { page } = await newSession(browser, size)
-  await page.goto(`${app.url}${at}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${email}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL((url) => url.pathname === at.replace(/\?.*/, ''))
-  return page
-}
-
-/** Accessible, and nothing sticks out at the side. */
-async function expectSound(page: Page, where: string): Promise<void> {
-  await expectAccessible(page, where)
-  const { scrolls, width } = await page.evaluate(() => ({
-    scrolls: document.documentElement.scrollWidth,
-    width: window.innerWidth,
-  }))
-  expect(scrolls, `${where} at ${String(width)} px`).toBeLessThanOrEqual(width)
-}
+const signedIn = async (name: string, size: typeof desk, at: string): Promise<Page> =>
+  signIn((await newSession(browser, size)).page, app, name, at)
 
 describe.each([desk, phone])('orders at $width px', (size) => {
   it('are listed, searched and filtered by the address', async () => {

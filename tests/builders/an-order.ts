@@ -1,4 +1,5 @@
-import type { AnsweredCaution, BathOrderFields, SaidCaution } from '../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution } from '../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields, SaidCaution } from '../../shared/contracts/order-primitives.ts'
 import { newKey, password } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 import { aGroup, aTaxon } from './a-collection.ts'

@@ -1,4 +1,5 @@
-import type { AnsweredCaution, SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import { answers, overrideOf, wasRead } from '../../../shared/domain/orders/signed-answers.ts'
 import { orderProblemWords } from '../../../shared/messages/orders.ts'
 import { Problem } from '../../platform/http/problem.ts'

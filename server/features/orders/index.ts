@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Db } from '../../platform/database/db.ts'

@@ -1,8 +1,5 @@
-import type {
-  AnsweredCaution,
-  BathOrderFields,
-  SaidCaution,
-} from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields, SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import type { BathDose } from '../../../shared/domain/dose/bath-dose.ts'
 import type { SignedAnswer } from '../../../shared/domain/orders/signed-answers.ts'

@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Product, DoseLine } from '../../../shared/contracts/formulary.contract.ts'
 import { copperInPentahydrate } from '../../../shared/domain/dose/copper.ts'
 import type { BathProduct } from '../../../shared/domain/dose/bath-product.ts'

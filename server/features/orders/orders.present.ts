@@ -1,4 +1,5 @@
-import type { BathOrderFields, OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
 import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'

@@ -1,5 +1,5 @@
 import type { Order, OrderRow } from '../../../shared/contracts/orders.contract.ts'
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
 import type { listOrders } from '../../../shared/contracts/orders.contract.ts'

@@ -1,4 +1,5 @@
-import type { AnsweredCaution, BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { orderProblemWords, orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'

@@ -1,4 +1,5 @@
-import type { BathOrderFields, OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { formatVolumeWithError } from '../../../shared/domain/quantities/format-volume-with-error.ts'
 import { formatVolume } from '../../../shared/domain/quantities/format-volume.ts'
 import { orderMissing, orderWords, volumeMethods } from '../../../shared/messages/orders.ts'

@@ -1,4 +1,5 @@
-import type { OrderAmount, OrderPreview, SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderAmount, SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import type { z } from 'zod'
 import type { Caution, CautionCondition } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import type { BathDose } from '../../../shared/domain/dose/bath-dose.ts'

@@ -1,4 +1,4 @@
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { convert } from '../../../shared/domain/units/convert.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'

@@ -1,4 +1,5 @@
-import type { OrderPreview, SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 
 /** What the signer says to the cautions: warnings read, and stops overridden with a reason. */

@@ -1,4 +1,4 @@
-import type { SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'

@@ -7,7 +7,8 @@ import {
   reviseDraft,
   signOrder,
 } from '../../../shared/contracts/orders.contract.ts'
-import type { BathOrderFields, Order } from '../../../shared/contracts/orders.contract.ts'
+import type { Order } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { api } from '../../lib/api-client.ts'
 import { orderQuery, ordersKey } from './queries.ts'
 

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import { useQuery } from '@tanstack/react-query'
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { agentNames, basisNames } from '../../../shared/messages/formulary.ts'

@@ -1,4 +1,4 @@
-import { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { instantOfMoment, localMomentOf } from '../../lib/local-moment.ts'
 import type { LocalMoment } from '../../lib/local-moment.ts'

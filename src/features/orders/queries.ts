@@ -8,7 +8,7 @@ import {
   previewOrder,
   printOrder,
 } from '../../../shared/contracts/orders.contract.ts'
-import type { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { addressOf, api } from '../../lib/api-client.ts'
 
 export const ordersKey = ['orders'] as const

@@ -1,5 +1,5 @@
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
-import type { SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import { overrideOf, wasRead } from '../../../shared/domain/orders/signed-answers.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { cautionKey } from './answers-model.ts'

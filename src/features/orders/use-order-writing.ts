@@ -1,6 +1,7 @@
 import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
-import type { AnsweredCaution, BathOrderFields, Order } from '../../../shared/contracts/orders.contract.ts'
+import type { AnsweredCaution, Order } from '../../../shared/contracts/orders.contract.ts'
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { newId } from '../../lib/new-id.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import type { ProblemError } from '../../lib/problem-error.ts'

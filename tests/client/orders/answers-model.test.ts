@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import type { OrderPreview, SaidCaution } from '../../../shared/contracts/orders.contract.ts'
+import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import {
   answersToSend,
   cautionKey,

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { BathOrderFields } from '../../../shared/contracts/orders.contract.ts'
+import { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { differences, emptyOrder, fieldsOf, valuesOf } from '../../../src/features/orders/order-form-model.ts'
 import type { OrderValues } from '../../../src/features/orders/order-form-model.ts'
 import { newId } from '../../../src/lib/new-id.ts'
