@@ -84,9 +84,7 @@ export function exceptionsOf(
 ): Exception[] {
   const { judgement, block, row, drift } = situation
   const zone = judgement?.facts.zone ?? 'UTC'
-  const found: Exception[] = judgement
-    ? listExceptions(judgement.facts).map((caution) => saidForSheet(caution, zone))
-    : []
+  const found: Exception[] = []
   const mark = (code: string, level: Exception['level'], title: string, text: string) =>
     found.push({ ruleId: 'record', code, level, title, text, resolve: [] })
   const amount = given.amount && judgeAmount(situation, given.amount)
@@ -116,5 +114,7 @@ export function exceptionsOf(
     mark('signed-after', 'warning', doseWords.signedAfter, doseWords.signedAfterText)
   if (row.phase === 'held') mark('while-held', 'warning', doseWords.whileHeld, doseWords.whileHeldText)
   if (block.state !== 'intact') mark('not-intact', 'warning', doseWords.notIntact, doseWords.notIntact)
-  return found
+  // what went in, and for whom, stands before what would have been asked for
+  const rules = judgement ? listExceptions(judgement.facts).map((caution) => saidForSheet(caution, zone)) : []
+  return [...found, ...rules]
 }

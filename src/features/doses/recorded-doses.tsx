@@ -48,7 +48,11 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
       )}
       <p className="row row-wrap">
         <b className="struck-text">{kindWords(record.kind)}</b>
-        {record.amountText === null ? null : <DoseText text={record.amountText} size="strong" />}
+        {record.amountText === null ? null : (
+          <span className="struck-text">
+            <DoseText text={record.amountText} size="strong" />
+          </span>
+        )}
         {record.lotNumber === null ? null : <span>{words.lotGiven({ lot: record.lotNumber })}</span>}
         {record.twice ? <Tag kind="late">{words.twice}</Tag> : null}
       </p>
