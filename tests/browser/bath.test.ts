@@ -61,7 +61,7 @@ const expectedErrors = [
   /ERR_INTERNET_DISCONNECTED/,
 ]
 const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, expectedErrors }
+const phone = { width: 390, height: 844, keepsSheets: true, expectedErrors }
 
 /** A formalin bath of 45 min at 100 µL/L, a hazard: 2,181.4 L × 100 µL/L = 218.14 mL, worked by hand. */
 async function aSignedBath(given: object = {}): Promise<string> {

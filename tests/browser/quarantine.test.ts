@@ -45,7 +45,7 @@ afterAll(async () => {
 
 const ago = (days: number) => new Date(app.clock.now().getTime() - days * dayMs).toISOString()
 const desk = { width: 1440, height: 900 }
-const phone = { width: 390, height: 844 }
+const phone = { width: 390, height: 844, keepsSheets: true }
 
 /** Pictures for whoever looks, in the ignored folder; only when asked for. */
 const picture = async (page: Page, name: string) => {

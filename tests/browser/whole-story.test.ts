@@ -75,7 +75,7 @@ const expectedErrors = [
   /ERR_INTERNET_DISCONNECTED/,
 ]
 const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, expectedErrors }
+const phone = { width: 390, height: 844, keepsSheets: true, expectedErrors }
 
 async function at(size: typeof desk, name: string, address: string, daysLater = 0): Promise<BrowserSession> {
   const session = await newSession(browser, { ...size, daysLater })

@@ -27,6 +27,8 @@ export interface SessionOptions {
   theme?: 'light' | 'dark'
   /** How many days after the test day the page lives; set the clock of the server to it too. */
   daysLater?: number
+  /** With the service worker that keeps the sheets of the tank on the device: for tests that go without a signal, since to fill it costs seconds. */
+  keepsSheets?: boolean
   /** Console lines that this test provokes on purpose, such as the browser's own line about a 403. */
   expectedErrors?: readonly RegExp[]
 }
@@ -42,12 +44,13 @@ export interface BrowserSession {
  * address off this machine.
  */
 export async function newSession(browser: Browser, options: SessionOptions): Promise<BrowserSession> {
-  const { width, height, theme = 'light', daysLater, expectedErrors = [] } = options
+  const { width, height, theme = 'light', daysLater, keepsSheets = false, expectedErrors = [] } = options
   const context = await browser.newContext({
     viewport: { width, height },
     colorScheme: theme,
     hasTouch: width < 600,
     reducedMotion: 'reduce',
+    serviceWorkers: keepsSheets ? 'allow' : 'block',
   })
   await putOnTestDay(context, daysLater)
   const troubles = watchForTroubles(context, expectedErrors)
