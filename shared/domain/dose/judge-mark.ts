@@ -18,8 +18,15 @@ export interface MarksOnFile {
 export type MarkJudgement = 'agrees' | 'differs' | 'not-on-file' | 'unreadable'
 
 const leastDepthMetres = 0.01
-const numberAndUnit = /(\d+(?:[.,]\d+)?)\s*([a-zA-Zµ″"'’.]+)/
-const plain = (text: string) => text.trim().toLowerCase().replace(/\s+/g, ' ')
+// the whole of what was typed: "not at 0.68 m" and "0.68 m or 6.8 m" name no depth
+const numberAndUnit = /^(?:(?:depth|water)\s+)*(\d+(?:[.,]\d+)?)\s*([a-zA-Zµ″"'’.]+)$/i
+/** As somebody names a mark: "at the Red  line" is "red line". */
+const plain = (text: string) =>
+  text
+    .trim()
+    .toLowerCase()
+    .replace(/\s+/g, ' ')
+    .replace(/^(?:(?:filled|up|to|at|on|the)\s)+/, '')
 
 /**
  * Whether the mark that a second person saw is the one that the volume rests on: a depth within the drift that the order
@@ -32,9 +39,9 @@ const plain = (text: string) => text.trim().toLowerCase().replace(/\s+/g, ' ')
 export function judgeMark(read: string, onFile: MarksOnFile, allowedDriftPercent: number): MarkJudgement {
   const { depths, fillMark } = onFile
   if (depths.length === 0 && !fillMark) return 'not-on-file'
-  const [, value = '', unit = ''] = numberAndUnit.exec(read) ?? []
+  const [, value = '', unit = ''] = numberAndUnit.exec(read.trim()) ?? []
   if (fillMark) {
-    if (plain(fillMark.mark) !== '' && plain(read).includes(plain(fillMark.mark))) return 'agrees'
+    if (plain(fillMark.mark) !== '' && plain(read) === plain(fillMark.mark)) return 'agrees'
     const volume = parseQuantity({ value, unit }, { dimension: 'volume', above: 0 })
     if (volume.ok) return isNear(volume.value.value, fillMark.volume, doseLimits.agreementPercent, 0)
     if (depths.length === 0) return 'differs'

@@ -21,6 +21,10 @@ describe('the mark that a second person saw', () => {
     ['0.68', 'unreadable'],
     ['at the line', 'unreadable'],
     ['68 L', 'unreadable'],
+    ['1 0.68 m', 'unreadable'],
+    ['-0.68 m', 'unreadable'],
+    ['0.68 m or 6.8 m', 'unreadable'],
+    ['not at 0.68 m', 'unreadable'],
   ])('%s in water 0.68 m deep: %s', (read, judgement) => {
     expect(judgeMark(read, tank, allowed)).toBe(judgement)
   })
@@ -43,8 +47,26 @@ describe('the mark that a second person saw', () => {
     ['60000 mL', 'agrees'],
     ['blue line', 'differs'],
     ['80 L', 'differs'],
+    ['not the red line: filled to 20 L only', 'differs'],
+    ['5 cm over the red line', 'differs'],
+    ['filled to the red line', 'agrees'],
   ])('%s on a tub filled to the red line, 60 L: %s', (read, judgement) => {
     expect(judgeMark(read, tub, allowed)).toBe(judgement)
+  })
+
+  it.each([
+    ['20 L mark', 'agrees'],
+    ['120 L mark', 'differs'],
+    ['20 L', 'agrees'],
+  ])('%s on a tub whose mark is called by its litres: %s', (read, judgement) => {
+    const bucket = { depths: [], fillMark: { mark: '20 L mark', volume: q('20', 'L') } }
+    expect(judgeMark(read, bucket, allowed)).toBe(judgement)
+  })
+
+  it('is not a word in which the letter of the mark happens to stand', () => {
+    const lettered = { depths: [], fillMark: { mark: 'A', volume: q('20', 'L') } }
+    expect(judgeMark('a', lettered, allowed)).toBe('agrees')
+    expect(judgeMark('mark B at the wall', lettered, allowed)).toBe('differs')
   })
 
   it('is compared with nothing where nothing is on file, and that is said', () => {
