@@ -98,6 +98,7 @@ export const cautionTitles = defineMessages({
   'basis-missing': 'Figure does not say of what it is',
   'dose-early': 'Dose is early',
   'dose-very-early': 'Dose is much too early',
+  'interval-within-contact': 'Next dose comes before the bath is over',
   'dose-late': 'Dose is late',
   'doses-past-plan': 'All planned doses are given',
   'same-agent-together': 'The same drug is ordered for this water already',
@@ -266,6 +267,8 @@ export const cautionTexts = defineMessages({
     `${hours(p.hours)} after the last dose. The window opens after ${hours(p.earliestHours)}.`,
   'dose-very-early': (p) =>
     `${hours(p.hours)} after the last dose, less than half of the ${hours(p.intervalHours)} between doses.`,
+  'interval-within-contact': (p) =>
+    `Doses are ${hours(p.intervalHours)} apart, and each bath lasts ${minutes(p.contactMinutes)}. The animals would be in two doses at once.`,
   'dose-late': (p) =>
     `${hours(p.hours)} after the last dose. The window closed after ${hours(p.latestHours)}.`,
   'doses-past-plan': (p) => `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} are given.`,

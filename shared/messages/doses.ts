@@ -5,6 +5,8 @@ export const doseWords = defineMessages({
   unreadable: 'The signed text of this order cannot be read any more. Do not dose; tell the administrator.',
   earlierOpen: (p: { key: string }) =>
     `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
+  stillRunning: (p: { key: string; at: string }) =>
+    `The bath of dose ${p.key}, begun ${p.at}, has no end. Record first when the animals were out of it or the water was changed.`,
   notIntact: 'The signed order no longer matches its signature. Do not dose; tell a veterinarian.',
   held: 'The order is held. A veterinarian lifts the hold.',
   ended: 'The order has ended.',
@@ -12,6 +14,8 @@ export const doseWords = defineMessages({
   noAmount: 'The amount cannot be worked out for the water as it is now.',
   driftOutside: (p: { percent: string; allowed: string }) =>
     `The volume has moved by ${p.percent} since the signature; the order allows ${p.allowed}. A veterinarian amends the order.`,
+  amountMoved: (p: { now: string; signed: string; allowed: string }) =>
+    `${p.now} is worked out now and ${p.signed} was signed, though the volume has hardly moved; the order allows ${p.allowed}. Somebody changed the strength of the product or another figure. A veterinarian looks, and amends the order.`,
   secondMissing: 'Another person has to calculate the amount without seeing yours.',
   secondDisagrees: 'The two calculations do not agree. Both begin again from the label.',
   firstMissing: 'Ask the first person to calculate.',

@@ -1,3 +1,4 @@
+import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse } from '../builders/a-bath.ts'
 import { aCase } from '../builders/a-case.ts'
@@ -82,6 +83,42 @@ describe('a dose whose animals have left the water', () => {
     await house.calculateSecond(bath, number).expect(201)
     await house.give(number).expect(201)
     expect(await openOf(others.accession)).toEqual([])
+  })
+})
+
+describe('the next dose', () => {
+  const whyNot = async (number: string, key: string) => {
+    const sheet = await house.technician.agent.get(`/api/orders/${number}/doses/${key}`).expect(200)
+    return (sheet.body.why as string[]).join(' ').replaceAll('\u00a0', ' ')
+  }
+
+  it('waits until somebody recorded the end of the bath before it', async () => {
+    const number = await house.signedBath(await house.tankWithSchool(), { doses: 2, intervalHours: 24 })
+    const doseId = api.nextId()
+    await house.record(number, { id: doseId }).expect(201)
+    expect(await whyNot(number, '2')).toContain('The bath of dose 1, begun 1 Dec 2026, 14:20, has no end.')
+    const stop = { id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:20:00Z' }
+    await house.technician.agent.post(`/api/doses/${doseId}/stop`).send(stop).expect(201)
+    expect(await whyNot(number, '2')).not.toContain('has no end')
+  })
+
+  it('waits for a veterinarian when the strength of the product was changed after the signature', async () => {
+    const powder = await aProduct(api, {})
+    const number = await house.signedBath(await house.tankWithSchool(), {
+      productId: powder.id,
+      lotId: powder.lotId,
+      target: { value: '2', unit: 'mg/L' },
+      basis: 'active',
+      division: { value: '0.01', unit: 'g' },
+      contactMinutes: null,
+      timing: 'indefinite',
+    })
+    expect(await whyNot(number, '1')).not.toContain('was signed')
+    const owner = new pg.Client({ connectionString: api.ownerUrl })
+    await owner.connect()
+    await owner.query(`UPDATE products SET strength_entered_value = 9.9 WHERE id = $1`, [powder.id])
+    await owner.end()
+    expect(await whyNot(number, '1')).toContain('g is worked out now and 4.36 g was signed')
   })
 })
 

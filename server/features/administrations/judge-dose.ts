@@ -1,11 +1,14 @@
 import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
 import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
+import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
+import { saidAmount } from '../orders/index.ts'
 import type { SignedOrder } from '../orders/index.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
 import { firstOf, secondOf, secondStands } from './second-person.ts'
@@ -57,6 +60,24 @@ export function overrideFor(content: SignedOrder, caution: Caution): SignedOrder
     : null
 }
 
+/** An earlier bath of the order that nobody has ended: the animals would be in two doses at once. */
+function runningBath({ content, records, planned }: DoseSituation) {
+  if (content.fields.contactMinutes === null) return undefined
+  return records.find(
+    ({ kind, dose_key, stop_at }) =>
+      (kind === 'given' || kind === 'recorded') && dose_key !== planned.key && stop_at === null,
+  )
+}
+
+/** Whether the amount has left what the signature covers by more than the water can explain. */
+function amountMoved({ content, judgement }: DoseSituation): boolean {
+  const now = judgement?.dose
+  if (!now) return false
+  const { unrounded, unroundedUnit } = content.amount
+  const moved = checkDrift(unrounded, now.amount, content.fields.allowedVolumeDriftPercent)
+  return now.unit !== unroundedUnit || !moved.ok || !moved.value.within
+}
+
 /** Everything that stands in the way of giving the dose now, in words. */
 export function obstacles(situation: DoseSituation, calculations: Calculations): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
@@ -72,11 +93,27 @@ export function obstacles(situation: DoseSituation, calculations: Calculations):
     .slice(0, situation.plan.indexOf(situation.planned))
     .find(({ key }) => !records.some((record) => record.dose_key === key))
   if (earlier) why.push(doseWords.earlierOpen({ key: earlier.key }))
+  const running = runningBath(situation)
+  if (running)
+    why.push(
+      doseWords.stillRunning({
+        key: running.dose_key,
+        at: sayInstant(running.happened_at.toISOString(), situation.judgement?.facts.zone ?? 'UTC'),
+      }),
+    )
   if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
   if (drift && !drift.within)
     why.push(
       doseWords.driftOutside({
         percent: formatDose(Number(Math.abs(drift.percent).toFixed(1)), 'percent').text,
+        allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
+      }),
+    )
+  else if (amountMoved(situation))
+    why.push(
+      doseWords.amountMoved({
+        now: judgement?.dose ? saidAmount(judgement.dose).text : '',
+        signed: content.amount.text,
         allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
       }),
     )

@@ -114,6 +114,7 @@ export interface CautionParams {
   'basis-missing': Record<never, never>
   'dose-early': { hours: number; earliestHours: number }
   'dose-very-early': { hours: number; intervalHours: number }
+  'interval-within-contact': { intervalHours: number; contactMinutes: number }
   'dose-late': { hours: number; latestHours: number }
   'doses-past-plan': { given: number; planned: number }
   'same-agent-together': { orderNumber: string }

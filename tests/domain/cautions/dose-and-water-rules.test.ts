@@ -187,6 +187,29 @@ describe('R28: spacing of doses, in true hours', () => {
       spaced(saturday, instantOfLocalTime('2026-03-28', '15:00', zone), 24, { readingDriven: true }),
     ).toEqual([])
   })
+  it('does not let a dose come before the bath of the last one is over', () => {
+    const baths = (intervalHours: number, contactMinutes: number, plannedDoses = 3) =>
+      firedBy(
+        'R28',
+        someFacts('formalin', formalin(167), {
+          order: {
+            contactMinutes: known(contactMinutes),
+            spacing: known({
+              intervalHours,
+              lastGivenAt: null,
+              givenDoses: 0,
+              plannedDoses,
+              readingDriven: false,
+            }),
+          },
+        }),
+        'design',
+      )
+    expect(baths(2, 240)).toEqual(['stop interval-within-contact'])
+    expect(baths(1, 60)).toEqual(['stop interval-within-contact'])
+    expect(baths(24, 60)).toEqual([])
+    expect(baths(0, 60, 1)).toEqual([])
+  })
   it('an assay on day 8 asks for another dose; without a calendar interval nothing is early (reference case)', () => {
     expect(firedBy('R28', someFacts('praziquantel', mg(2)), 'start')).toEqual([])
   })

@@ -3,8 +3,11 @@ import { doseWindow } from '../../schedule/dose-window.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
+const minutesPerHour = 60
+
 /**
- * A dose outside its window, or past the planned number, counted in true hours since the last one given.
+ * A dose outside its window, past the planned number, or before the bath of the last one is over, counted in true hours
+ * since the last one given.
  * Reading-driven additions are spaced by their own signed limits.
  */
 export const doseSpacing = defineRule({
@@ -21,7 +24,7 @@ export const doseSpacing = defineRule({
       tighter: 'higher',
     },
   },
-  uses: ['order.spacing', 'order.startsAt'],
+  uses: ['order.spacing', 'order.startsAt', 'order.contactMinutes'],
   sources: [
     { source: 'hyatt-2017', mark: 'V' },
     { source: 'project-default', mark: 'P' },
@@ -38,6 +41,14 @@ export const doseSpacing = defineRule({
         level: 'stop',
         params: { given: givenDoses, planned: plannedDoses },
         resolvedBy: ['amend-order'],
+      })
+    const contactMinutes = valueOf(facts.order.contactMinutes)
+    if (plannedDoses > 1 && contactMinutes !== null && intervalHours * minutesPerHour <= contactMinutes)
+      found.push({
+        code: 'interval-within-contact',
+        level: 'stop',
+        params: { intervalHours, contactMinutes },
+        resolvedBy: ['amend-order', 'check-figure'],
       })
     const startsAt = valueOf(facts.order.startsAt)
     // of an amended order the doses given before count: the next is the one after them
