@@ -101,7 +101,7 @@ export default defineConfig({
           environment: 'node',
           include: files('browser'),
           ...withPostgres,
-          testTimeout: 60_000,
+          testTimeout: 120_000,
           hookTimeout: 120_000,
         },
       },
