@@ -92,7 +92,14 @@ describe('a printed order that is looked up', () => {
   })
 
   it('has a box for the pen only at doses that nobody recorded', async () => {
-    const { number } = await aSigned({ doses: 2, intervalHours: 48 })
+    const tank = await aBathWater(api, 'QT-5')
+    const school = await aSchool(api, tank.id, 2)
+    const { number } = await aSigned({
+      enclosureId: tank.id,
+      animalIds: [school.id],
+      doses: 2,
+      intervalHours: 48,
+    })
     const { agent } = await api.as('technician')
     await agent
       .post(`/api/orders/${number}/doses/1/record`)
@@ -119,9 +126,10 @@ describe('a printed bath sheet', () => {
   it('says what to weigh with its working, what has to be true, when to stop, and has lines for the pen', async () => {
     const { number, hash } = await aSigned()
     const bytes = await printed(`/api/orders/${number}/doses/1/print`)
-    expect(pageCount(bytes)).toBe(2)
-    // the page that the second person gets has no amount on it
-    expect(textOf(bytes, 2)).not.toContain('4.36')
+    // the last page is the one that the second person gets: it has no amount on it
+    expect(pageCount(bytes)).toBe(3)
+    expect(textOf(bytes, 3)).toContain('Second person')
+    expect(textOf(bytes, 3)).not.toContain('4.36')
     const text = textOf(bytes)
     let from = 0
     for (const part of [

@@ -69,7 +69,7 @@ const isReady = () =>
     (answer) => answer.status === 200,
     () => false,
   )
-const ready = () => until('the server answers', 100, isReady)
+const ready = () => until('the server answers', 180, isReady)
 const portFree = () => until('the port is free', 12, async () => !(await isReady()))
 const databaseRuns = () => existsSync(path.join(data, 'pg/postmaster.pid'))
 const databasePid = () => Number(readFileSync(path.join(data, 'pg/postmaster.pid'), 'utf8').split('\n')[0])

@@ -36,11 +36,14 @@ const numberOf = async (kind: string) =>
 describe('a transaction', () => {
   it('starts again from BEGIN after a deadlock, and both changes are made', async () => {
     let begins = 0
+    let holding = 0
     const cross = (first: string, second: string) =>
       transactions.inTransaction(context, async (tx) => {
         begins += 1
         await tx.manager.query('UPDATE counters SET last_number = last_number + 1 WHERE kind = $1', [first])
-        await pause(80)
+        holding += 1
+        // each holds what the other wants
+        while (holding < 2) await pause(5)
         await tx.manager.query('UPDATE counters SET last_number = last_number + 1 WHERE kind = $1', [second])
       })
     await Promise.all([cross('a', 'b'), cross('b', 'a')])
