@@ -1,5 +1,4 @@
 import type { z } from 'zod'
-import './plain-refusals.ts'
 import type { Action } from '../domain/permissions/table.ts'
 import type { ProblemCode } from './problems.ts'
 import './input-words.ts'

@@ -10,7 +10,7 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FactTimes } from '../facility/index.ts'
 import * as repository from './administrations.repository.ts'
 import { createCalculations } from './calculations.service.ts'
-import { lockAndRead, personOf, refuseGiver, subjectOf } from './dose-context.ts'
+import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { createStrikes } from './strike.service.ts'
 import { goneOf } from './dose-situation.ts'
@@ -133,8 +133,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const earlier = await repository.findDose(tx, given.id)
         if (earlier?.doseKey === key && earlier.kind === 'given') return
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
-        if (situation.block.state !== 'intact')
-          throw new Problem('broken-record', { detail: doseWords.notIntact })
+        refuseBroken(situation)
         await refuseOtherLot(tx, situation, given.lotId)
         const calculations = await parts.calculations(situation.versionId, key, tx)
         const why = obstacles(situation, calculations)
