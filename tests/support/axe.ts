@@ -10,7 +10,11 @@ const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']
  * @param within only this part of the page is judged: on a large page one run takes seconds
  */
 export async function expectAccessible(page: Page, where: string, within?: string): Promise<void> {
-  const axe = new AxeBuilder({ page }).withTags(tags)
+  // No sheet has frames, so one run in the page itself judges all of it: without this each run opens a second page
+  const axe = new AxeBuilder({ page })
+    .setLegacyMode()
+    .options({ resultTypes: ['violations'] })
+    .withTags(tags)
   const { violations, passes } = await (within === undefined ? axe : axe.include(within)).analyze()
   const faults = violations.flatMap(({ id, help, nodes }) =>
     nodes.map((node) => `${id}: ${help}\n    ${node.target.join(' ')}\n    ${node.failureSummary ?? ''}`),
