@@ -59,13 +59,13 @@ export function compose(outside: Outside) {
     }),
   }
   const facility = createFacility(parts)
-  const people = createPeople({ ...parts, facility: facility.service })
+  const lockout = createLockout(parts)
+  const people = createPeople({ ...parts, facility: facility.service, lockout })
   const authenticator = createAuthenticator(people)
   const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
-  const lockout = createLockout(parts)
   const audit = createAudit(parts)
   const signer = createSigner(path.join(outside.dataFolder, 'keys'))
-  const signing = createSigning({ ...parts, signer, lockout, facility: facility.service, people })
+  const signing = createSigning({ ...parts, signer, facility: facility.service, people })
   const enclosures = createEnclosures(parts)
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })

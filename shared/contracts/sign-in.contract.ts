@@ -83,7 +83,7 @@ export const changePassword = contract({
     newPassword: NewPassword,
   }),
   reply: { 200: Me },
-  problems: ['password-wrong', 'password-too-weak'],
+  problems: ['password-wrong', 'password-too-weak', 'sign-in-locked'],
 })
 
 /** Preferences a person may set; anything else is refused. */

@@ -231,6 +231,33 @@ describe('sign-in', () => {
     await agent.get('/api/settings').expect(200)
   })
 
+  it('counts wrong passwords of somebody signed in towards one lock, in whatever form', async () => {
+    const { id, agent } = await api.as('veterinarian')
+    const { signing, people, parts } = api.composition
+    const actor = { personId: id, printedName: 'Vet', roles: ['veterinarian' as const] }
+    await people.service.enterLicence({ actor, requestId: 'test' }, id, {
+      id: api.nextId(),
+      jurisdiction: 'Norrell Sound',
+      number: 'VL-77',
+      validFrom: '2026-01-01',
+      validUntil: '2026-12-31',
+    })
+    const change = (currentPassword: string) =>
+      agent.post('/api/me/password').send({ currentPassword, newPassword: 'another one, longer' })
+    const sign = (typed: string) =>
+      signing.service.confirmSignatory({ actor, requestId: 'test' }, 'order.sign', typed, parts.clock.now())
+    for (let i = 0; i < 3; i++) await change('wrong').expect(403)
+    for (let i = 0; i < 2; i++) await expect(sign('wrong')).rejects.toMatchObject({ code: 'password-wrong' })
+    const locked = await change(password).expect(429)
+    expect([locked.body.code, locked.headers['retry-after']]).toEqual(['sign-in-locked', '900'])
+    expect(locked.body.detail).toContain('15 min')
+    await expect(sign(password)).rejects.toMatchObject({ code: 'sign-in-locked' })
+    const before = api.clock.now()
+    api.clock.set(new Date(before.getTime() + 15 * 60_000 + 1000))
+    await change(password).expect(200)
+    api.clock.set(before)
+  })
+
   it.each(['a\u0000b', 'half \ud800', 'bell \u0007'])(
     'refuses text that nothing could show again: %j',
     async (odd) => {

@@ -1,5 +1,7 @@
 import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
+import type { Lockout } from '../../platform/sign-in/lockout.ts'
+import { createOwnPassword } from '../../platform/sign-in/own-password.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { presentPerson, presentPersonRow } from './people.present.ts'
 import { createPeopleQuestions } from './people.questions.ts'
@@ -13,12 +15,13 @@ export type { PeopleService } from './people.service.ts'
 export type { PeopleQuestions, ValidLicence } from './people.questions.ts'
 export const peopleEntities = [Person, PersonRole, LicenceRecord, LicenceVoid]
 
-export function createPeople(parts: Parts & { facility: FacilityService }) {
+export function createPeople(parts: Parts & { facility: FacilityService; lockout: Lockout }) {
   const { dataSource, facility, clock } = parts
-  const service = createPeopleService({
-    ...parts,
+  const ownPassword = createOwnPassword({
+    lockout: parts.lockout,
     readPasswordHash: (id) => readPasswordHash(dataSource, id),
   })
+  const service = createPeopleService({ ...parts, ownPassword })
   const questions = createPeopleQuestions({ dataSource, facility, now: () => clock.now() })
   const today = async () => ({
     on: await facility.dateOf(clock.now()),
@@ -42,7 +45,7 @@ export function createPeople(parts: Parts & { facility: FacilityService }) {
     queries,
     readPreferences: async (id: string) => (await readPerson(dataSource, id))?.preferences ?? {},
     readCredentials: (email: string) => readCredentials(dataSource, email),
-    readPasswordHash: (id: string) => readPasswordHash(dataSource, id),
+    ownPassword,
     countPeople: () => countPeople(dataSource),
     routes: peopleRoutes(service, queries),
   }

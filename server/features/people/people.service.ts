@@ -3,13 +3,14 @@ import type { Ids } from '../../platform/ids.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
-import { hashPassword, isPassword, makeOneTimePassword } from '../../platform/sign-in/passwords.ts'
+import type { OwnPassword } from '../../platform/sign-in/own-password.ts'
+import { hashPassword, makeOneTimePassword } from '../../platform/sign-in/passwords.ts'
 import * as repository from './people.repository.ts'
 
 export interface PeopleParts {
   transactions: Transactions
   ids: Ids
-  readPasswordHash(id: string): Promise<string | null>
+  ownPassword: OwnPassword
 }
 
 const subject = (person: { id: string; printedName: string }) => ({
@@ -139,12 +140,11 @@ export function createPeopleService(parts: PeopleParts) {
       given: { currentPassword: string; newPassword: string; sessionKept: string },
     ): Promise<void> {
       const id = context.actor.personId
-      const current = id === null ? null : await parts.readPasswordHash(id)
-      if (id === null || current === null) throw new Problem('not-signed-in')
-      if (!(await isPassword(current, given.currentPassword)))
-        throw new Problem('password-wrong', {
-          errors: [{ pointer: '/currentPassword', detail: 'This is not your password until now.' }],
-        })
+      if (id === null) throw new Problem('not-signed-in')
+      await parts.ownPassword.confirm(id, given.currentPassword, {
+        pointer: '/currentPassword',
+        detail: 'Nothing was changed. Type the password that you used until now.',
+      })
       if (given.newPassword === given.currentPassword)
         throw new Problem('password-too-weak', {
           errors: [

@@ -1,7 +1,6 @@
 import { getSigningKey } from '../../../shared/contracts/signing.contract.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Parts } from '../../platform/parts.ts'
-import type { Lockout } from '../../platform/sign-in/lockout.ts'
 import type { Signer } from '../../platform/signatures/signer.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { People } from '../people/index.ts'
@@ -12,13 +11,11 @@ import { createSigningService } from './signing.service.ts'
 export type { Signatory, SigningService } from './signing.service.ts'
 export const signingEntities = [SignedText]
 
-export function createSigning(
-  parts: Parts & { signer: Signer; lockout: Lockout; facility: FacilityService; people: People },
-) {
+export function createSigning(parts: Parts & { signer: Signer; facility: FacilityService; people: People }) {
   const service = createSigningService({
     ...parts,
     validLicence: (personId, at) => parts.people.questions.validLicence(personId, at),
-    readPasswordHash: (personId) => parts.people.readPasswordHash(personId),
+    ownPassword: parts.people.ownPassword,
     readSignedText: (id, tx) => readSignedText(tx?.manager ?? parts.dataSource, id),
   })
   const { keyId, publicKeyPem } = parts.signer

@@ -7,8 +7,7 @@ import type { Tx } from '../../platform/database/transactions.ts'
 import type { Ids } from '../../platform/ids.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
-import type { Lockout } from '../../platform/sign-in/lockout.ts'
-import { isPassword } from '../../platform/sign-in/passwords.ts'
+import type { OwnPassword } from '../../platform/sign-in/own-password.ts'
 import type { Signer } from '../../platform/signatures/signer.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { ValidLicence } from '../people/index.ts'
@@ -18,10 +17,9 @@ import type { SignedText } from './signed-text.entity.ts'
 export interface SigningParts {
   ids: Ids
   signer: Signer
-  lockout: Lockout
+  ownPassword: OwnPassword
   facility: FacilityService
   validLicence(personId: string, at: Date): Promise<ValidLicence | null>
-  readPasswordHash(personId: string): Promise<string | null>
   readSignedText(id: string, tx?: Tx): Promise<SignedText | null>
 }
 
@@ -75,21 +73,10 @@ export function createSigningService(parts: SigningParts) {
           detail:
             'You can write, hold and stop. To sign, ask the administrator to enter a licence valid today.',
         })
-      // of the signer, wherever they sign
-      const tried = { emailKey: `sign:${personId}`, address: '' }
-      const minutes = await parts.lockout.minutesLocked(tried)
-      if (minutes > 0)
-        throw new Problem('sign-in-locked', {
-          detail: `Wait ${String(minutes)} min before signing again.`,
-          extra: { retry_after_seconds: minutes * 60 },
-        })
-      const right = await isPassword((await parts.readPasswordHash(personId)) ?? '', password)
-      await parts.lockout.note({ ...tried, succeeded: right })
-      if (!right)
-        throw new Problem('password-wrong', {
-          detail: 'Nothing was signed. Type your own password.',
-          errors: [{ pointer: '/password', detail: 'That is not your password.' }],
-        })
+      await parts.ownPassword.confirm(personId, password, {
+        pointer: '/password',
+        detail: 'Nothing was signed. Type your own password.',
+      })
       return { personId, printedName, licence }
     },
 
