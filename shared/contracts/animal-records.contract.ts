@@ -51,12 +51,12 @@ export const strikeWeight = contract({
   id: 'strikeWeight',
   method: 'post',
   path: '/animals/:accession/weights/:recordId/void',
-  action: 'weight.record',
+  action: 'weight.strike',
   summary: 'Strike out a wrong weight; it stays readable',
   params: recordParams,
   body: strikeBody,
   reply: { 200: Animal },
-  problems: ['not-found'],
+  problems: ['not-found', 'may-not'],
   idempotent: 'by-key',
 })
 

@@ -67,6 +67,8 @@ export const animalRefusals = defineMessages({
     'This line was written with a transaction of the register. Strike out the transaction instead.',
   onlyMovesInside:
     'Arrivals and departures belong to the register. Only moves inside the house are struck out here.',
+  strikeOwnWeight:
+    'A weight is struck out by whoever recorded it, on the same day, or by a veterinarian: doses were worked out from it. Ask a veterinarian, or weigh again.',
   strikeOwnDeath:
     'A death is struck out by whoever recorded it, on the same day, or by a veterinarian. Ask a veterinarian, or write an observation.',
   strikeOwnMove:

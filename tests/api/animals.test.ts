@@ -166,6 +166,31 @@ describe('moves', () => {
     expect(await auditOf(ray.accession)).toContain('animal.move')
   })
 
+  it('by a phone whose clock is fast has happened as soon as it is written down, for every reader, and not before', async () => {
+    const ray = await anAnimal(api, { taxonId, enclosureId: kelp.id })
+    const { agent } = await api.as('keeper')
+    const now = api.clock.now()
+    const fast = new Date(now.getTime() + 4 * 60_000).toISOString()
+    expect((await move(ray.url, { happenedAt: fast })).status).toBe(201)
+    await agent
+      .post(`${ray.url}/weights`)
+      .send({ id: api.nextId(), weight: { value: '40', unit: 'kg' }, basis: 'measured', happenedAt: fast })
+      .expect(201)
+    const readers = async (at: Date) => {
+      const { questions, queries } = api.composition.animals
+      const [known] = await questions.animalsById([ray.id], at)
+      const inRiver = (await questions.animalsIn([river.id], at)).some(({ animalId }) => animalId === ray.id)
+      const listed = (await queries.inhabitants(river.code, at)).some(({ id }) => id === ray.id)
+      return [known?.enclosureCode, inRiver, listed, known?.newestWeight?.value]
+    }
+    expect(await readers(now)).toEqual([river.code, true, true, '40'])
+    expect((await agent.get(ray.url)).body).toMatchObject({
+      place: { code: river.code },
+      newestWeight: { value: '40' },
+    })
+    expect(await readers(new Date(now.getTime() - 1000))).toEqual([kelp.code, false, false, undefined])
+  })
+
   it('refuses to take an animal out of an enclosure it is not in, and says where it is', async () => {
     const ray = await anAnimal(api, { taxonId, enclosureId: kelp.id })
     const reply = await move(ray.url, { fromEnclosureId: river.id, toEnclosureId: kelp.id })

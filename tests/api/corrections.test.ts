@@ -53,6 +53,31 @@ describe('striking out', () => {
     expect((await agent.get(school.url)).body.count.ledger).toBe(11)
   })
 
+  it('of a weight is for whoever recorded it, on the same day, or for a veterinarian', async () => {
+    const ray = await anAnimal(api, { taxonId, enclosureId: kelp.id })
+    const { agent } = await api.as('keeper')
+    const weigh = async (value: string) => {
+      const id = api.nextId()
+      await agent
+        .post(`${ray.url}/weights`)
+        .send({ id, weight: { value, unit: 'kg' }, basis: 'measured', happenedAt })
+        .expect(201)
+      return id
+    }
+    const [slip, late] = [await weigh('11'), await weigh('12')]
+    const refused = await strike(api.as('technician'), ray.url, 'weights', slip)
+    expect([refused.status, refused.body.code]).toEqual([403, 'may-not'])
+    expect(refused.body.detail).toMatch(/veterinarian/)
+    expect((await strike(api.as('keeper'), ray.url, 'weights', slip)).status).toBe(200)
+    const today = api.clock.now()
+    api.clock.set(new Date(today.getTime() + 24 * 3600_000))
+    expect((await strike(api.as('keeper'), ray.url, 'weights', late)).status).toBe(403)
+    expect((await agent.get(ray.url)).body.newestWeight.value).toBe('12')
+    expect((await strike(api.as('veterinarian'), ray.url, 'weights', late)).status).toBe(200)
+    api.clock.set(today)
+    expect((await agent.get(ray.url)).body.newestWeight).toBeNull()
+  })
+
   it('of a move is for whoever recorded it, for a veterinarian, and for the registrar where it broke no rule', async () => {
     const wing = await aPlace(api, { boundary: 'Striking wing' })
     const ray = await anAnimal(api, { taxonId, enclosureId: wing.id })

@@ -205,6 +205,50 @@ describe('the list', () => {
     expect(lines[1]).toContain(',Ash,Test penguin,Spheniscus testensis,bird,bird,')
   })
 
+  it('shows the administrator every line of an animal, and none of the words that belong to the chart', async () => {
+    const school = await anAnimal(api, { taxonId, enclosureId: tank.id, form: 'group', count: 9 })
+    const keeper = await api.as('keeper')
+    const send = async (what: string, body: object) => {
+      const id = api.nextId()
+      await keeper.agent
+        .post(`${school.url}/${what}`)
+        .send({ id, happenedAt: at, ...body })
+        .expect(201)
+      return id
+    }
+    const words = 'liver pale and friable'
+    const death = await send('deaths', { kind: 'found-dead', count: 1, carcassState: 'fresh', note: words })
+    const slip = await send('deaths', { kind: 'found-dead', count: 1, carcassState: 'fresh' })
+    await send('counts', { basis: 'counted', low: 7, high: 7, note: words })
+    await keeper.agent
+      .post(`${school.url}/deaths/${slip}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: words })
+      .expect(200)
+    const shown = async (role: 'keeper' | 'registrar' | 'administrator') => {
+      const { agent } = await api.as(role)
+      const urls = ['', '/log', '/counts', '/weights'].map((part) => `${school.url}${part}`)
+      const replies = []
+      for (const url of urls) replies.push((await agent.get(url).expect(200)).body)
+      return replies
+    }
+    for (const role of ['keeper', 'registrar'] as const)
+      expect(JSON.stringify(await shown(role))).toContain(words)
+    const [animal, log, counts] = await shown('administrator')
+    expect(JSON.stringify([animal, log, counts])).not.toContain(words)
+    const hidden = 'not shown to you'
+    expect(counts).toMatchObject({ statements: [{ low: 7, note: hidden }] })
+    expect(counts.deaths).toEqual(
+      expect.arrayContaining([
+        expect.objectContaining({ id: death, seenCount: 1, carcassState: 'fresh', note: hidden }),
+        expect.objectContaining({ id: slip, struck: expect.objectContaining({ reason: hidden }) }),
+      ]),
+    )
+    const line = (id: string) => log.rows.find((row: { id: string }) => row.id === id)
+    expect(line(death)).toMatchObject({ kind: 'death', facts: { seen: 1, note: hidden }, struckReason: null })
+    expect(line(slip)).toMatchObject({ facts: { note: null }, struckReason: hidden })
+  })
+
   it('tells the whole story of an animal in one log, struck lines included', async () => {
     const bird = await anAnimal(api, { taxonId, enclosureId: tank.id })
     const keeper = await api.as('keeper')

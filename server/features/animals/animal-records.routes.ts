@@ -76,7 +76,7 @@ export function animalRecordRoutes(service: AnimalsService, queries: AnimalQueri
     }),
     route(contracts.resolveDiscrepancy, async ({ params, body, context }) => {
       await service.resolveDiscrepancy(context, params.id, body)
-      const [row] = (await queries.discrepancies({ id: params.id })).rows
+      const [row] = (await queries.discrepancies({ id: params.id }, context.actor.roles)).rows
       if (!row) throw new Problem('not-found')
       return row
     }),

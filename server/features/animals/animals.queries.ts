@@ -8,10 +8,10 @@ import type {
   WeightEntry,
 } from '../../../shared/contracts/animals.contract.ts'
 import type { TaxonRow } from '../../../shared/contracts/taxa.contract.ts'
+import { readsClinical } from '../../../shared/domain/permissions/reads-clinical.ts'
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Db } from '../../platform/database/db.ts'
-import { latestRecorded } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { readAnimals } from './animals.reads.ts'
 import type { AnimalsFilter } from './animals.reads.ts'
@@ -21,6 +21,7 @@ import type { DiscrepanciesFilter } from './chart.reads.ts'
 import { readLog } from './log.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 import type { TaxaFilter } from './taxa.reads.ts'
+import * as withhold from './withhold-clinical.ts'
 
 export interface Found<T> {
   rows: T[]
@@ -30,8 +31,7 @@ export interface Found<T> {
 /** What screens and files ask of animals. */
 export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
   const { dataSource: db, clock } = parts
-  // a phone whose clock goes ahead must not hide what it has just recorded
-  const present = () => latestRecorded(clock.now())
+  const present = () => clock.now()
 
   async function rowOf(accession: string) {
     const [row] = await readAnimals(db, { at: present(), accession })
@@ -54,7 +54,9 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
         chart.readDiscrepancies(db, { animalIds: [row.id] }),
         readTaxa(db, { ids: [row.taxon_id] }),
       ])
-      return show.presentAnimal({ row, ties, identifiers, locks, discrepancies, taxon: taxa[0] }, roles)
+      const taxon = taxa[0]
+      const shown = show.presentAnimal({ row, ties, identifiers, locks, discrepancies, taxon }, roles)
+      return readsClinical(roles) ? shown : withhold.withholdFromAnimal(shown)
     },
 
     /** Number of an animal by its id. */
@@ -70,9 +72,10 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
       return rows.map(show.presentAnimalRow)
     },
 
-    async weights(accession: string): Promise<WeightEntry[]> {
+    async weights(accession: string, roles: readonly Role[]): Promise<WeightEntry[]> {
       const rows = await chart.readWeights(db, { animalId: (await rowOf(accession)).id })
-      return rows.map(show.presentWeight)
+      const shown = rows.map(show.presentWeight)
+      return readsClinical(roles) ? shown : shown.map(withhold.withholdFromWeight)
     },
 
     async weight(id: string): Promise<WeightEntry> {
@@ -85,23 +88,26 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
       return (await chart.readMoves(db, (await rowOf(accession)).id)).map(show.presentMove)
     },
 
-    async counts(accession: string) {
+    async counts(accession: string, roles: readonly Role[]) {
       const { id } = await rowOf(accession)
       const [lines, statements, deaths] = await Promise.all([
         chart.readCountLines(db, id),
         chart.readCountStatements(db, id),
         chart.readDeaths(db, { animalIds: [id] }),
       ])
+      const isShown = readsClinical(roles)
+      const shownLines = lines.map(show.presentCountLine)
+      const shownDeaths = deaths.map(show.presentDeath)
       return {
-        lines: lines.map(show.presentCountLine),
+        lines: isShown ? shownLines : shownLines.map(withhold.withholdFromCountLine),
         statements: statements.map((row) => ({
           ...show.presentFact(row),
           basis: row.basis,
           low: row.low,
           high: row.high,
-          note: row.note,
+          note: isShown ? row.note : withhold.hide(row.note),
         })),
-        deaths: deaths.map(show.presentDeath),
+        deaths: isShown ? shownDeaths : shownDeaths.map(withhold.withholdFromDeath),
       }
     },
 
@@ -111,14 +117,26 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
       return show.presentDeath(row)
     },
 
-    async log(accession: string, page: { offset: number; limit: number }): Promise<Found<LogLine>> {
+    async log(
+      accession: string,
+      page: { offset: number; limit: number },
+      roles: readonly Role[],
+    ): Promise<Found<LogLine>> {
       const rows = await readLog(db, (await rowOf(accession)).id, page)
-      return { rows: rows.map(show.presentLogLine), total: rows[0]?.total ?? 0 }
+      const shown = rows.map(show.presentLogLine)
+      return {
+        rows: readsClinical(roles) ? shown : shown.map(withhold.withholdFromLogLine),
+        total: rows[0]?.total ?? 0,
+      }
     },
 
-    async discrepancies(filter: DiscrepanciesFilter): Promise<Found<Discrepancy>> {
+    async discrepancies(filter: DiscrepanciesFilter, roles: readonly Role[]): Promise<Found<Discrepancy>> {
       const rows = await chart.readDiscrepancies(db, filter)
-      return { rows: rows.map(show.presentDiscrepancy), total: rows[0]?.total ?? 0 }
+      const shown = rows.map(show.presentDiscrepancy)
+      return {
+        rows: readsClinical(roles) ? shown : shown.map(withhold.withholdFromDiscrepancy),
+        total: rows[0]?.total ?? 0,
+      }
     },
 
     async taxa(filter: TaxaFilter): Promise<Found<TaxonRow>> {

@@ -1,6 +1,7 @@
 import type { AnimalForm, BirthKind, LifeStage, Sex } from '../../../shared/domain/animals/description.ts'
 import type { QuarantineKindName, TaxonGroup } from '../../../shared/domain/taxa/taxon-group.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { happenedBy } from '../../platform/database/happened-by.ts'
 import { containing } from '../../platform/database/like.ts'
 
 /** An animal or group as it stood at an instant. */
@@ -73,7 +74,10 @@ const sortColumns = {
   arrived: 'r.since',
 } as const
 
-/** Everything about an animal at the instant $1, in one row: description, place, count, weight, locks. */
+/**
+ * Everything about an animal at the instant $1, in one row: description, place, count, weight, locks. It stands where its
+ * last move that had happened by then put it, also when that was written down on a device whose clock is fast.
+ */
 const asOf = `
   SELECT a.id, a.accession, a.form, a.split_from_id, a.version,
          CASE WHEN d.id IS NULL THEN a.name ELSE d.name END AS name,
@@ -96,22 +100,24 @@ const asOf = `
              AND NOT EXISTS (SELECT 1 FROM discrepancy_resolutions z
                               WHERE z.discrepancy_id = q.id AND z.recorded_at <= $1)) AS open_discrepancies
     FROM animals a
-    LEFT JOIN LATERAL (SELECT d.* FROM animal_descriptions d WHERE d.animal_id = a.id AND d.happened_at <= $1
+    LEFT JOIN LATERAL (SELECT d.* FROM animal_descriptions d WHERE d.animal_id = a.id AND ${happenedBy('d', '$1')}
                         ORDER BY d.happened_at DESC, d.position DESC LIMIT 1) d ON true
     JOIN taxa t ON t.id = coalesce(d.taxon_id, a.taxon_id)
-    LEFT JOIN stays s ON s.animal_id = a.id AND s.during @> $1::timestamptz
+    CROSS JOIN LATERAL (SELECT greatest($1::timestamptz, max(m.happened_at)) AS at FROM live_moves m
+                         WHERE m.animal_id = a.id AND m.happened_at > $1 AND ${happenedBy('m', '$1')}) p
+    LEFT JOIN stays s ON s.animal_id = a.id AND s.during @> p.at
     LEFT JOIN enclosures e ON e.id = s.enclosure_id
-    LEFT JOIN LATERAL (SELECT n.* FROM count_statements n WHERE n.animal_id = a.id AND n.happened_at <= $1
+    LEFT JOIN LATERAL (SELECT n.* FROM count_statements n WHERE n.animal_id = a.id AND ${happenedBy('n', '$1')}
                         ORDER BY n.happened_at DESC, n.recorded_at DESC, n.id DESC LIMIT 1) n ON true
     LEFT JOIN LATERAL (SELECT sum(x.delta) AS ledger,
                               sum(x.delta) FILTER (WHERE x.happened_at > n.happened_at) AS moved_since
-                         FROM live_count_entries x WHERE x.animal_id = a.id AND x.happened_at <= $1) c ON true
-    LEFT JOIN LATERAL (SELECT w.* FROM live_weights w WHERE w.animal_id = a.id AND w.happened_at <= $1
+                         FROM live_count_entries x WHERE x.animal_id = a.id AND ${happenedBy('x', '$1')}) c ON true
+    LEFT JOIN LATERAL (SELECT w.* FROM live_weights w WHERE w.animal_id = a.id AND ${happenedBy('w', '$1')}
                         ORDER BY w.happened_at DESC, w.recorded_at DESC, w.id DESC LIMIT 1) w ON true
     LEFT JOIN LATERAL (SELECT array_agg(k.kind) AS kinds FROM movement_locks k
-                        WHERE k.animal_id = a.id AND k.happened_at <= $1
+                        WHERE k.animal_id = a.id AND ${happenedBy('k', '$1')}
                           AND NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
-                                           WHERE f.lock_id = k.id AND f.happened_at <= $1)) k ON true`
+                                           WHERE f.lock_id = k.id AND ${happenedBy('f', '$1')})) k ON true`
 
 /** Animals and groups at an instant, by whatever filter; `total` of each row counts all that fit. */
 export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<AnimalReadRow[]> {

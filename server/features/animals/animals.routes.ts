@@ -29,17 +29,21 @@ export function animalRoutes(queries: AnimalQueries, clock: Clock): Route[] {
         rows: await queries.inhabitants(params.code, at),
       }
     }),
-    route(contracts.listWeights, async ({ params }) => ({ rows: await queries.weights(params.accession) })),
+    route(contracts.listWeights, async ({ params, context }) => ({
+      rows: await queries.weights(params.accession, context.actor.roles),
+    })),
     route(contracts.listMoves, async ({ params }) => ({ rows: await queries.moves(params.accession) })),
-    route(contracts.listCounts, ({ params }) => queries.counts(params.accession)),
-    route(contracts.listAnimalLog, async ({ params, query }) => {
+    route(contracts.listCounts, ({ params, context }) =>
+      queries.counts(params.accession, context.actor.roles),
+    ),
+    route(contracts.listAnimalLog, async ({ params, query, context }) => {
       const page = pageOf(query)
-      const { rows, total } = await queries.log(params.accession, page)
+      const { rows, total } = await queries.log(params.accession, page, context.actor.roles)
       return { rows, total, nextCursor: nextCursorOf(page, total) }
     }),
-    route(contracts.listDiscrepancies, async ({ query }) => {
+    route(contracts.listDiscrepancies, async ({ query, context }) => {
       const page = pageOf(query)
-      const { rows, total } = await queries.discrepancies({ ...query, ...page })
+      const { rows, total } = await queries.discrepancies({ ...query, ...page }, context.actor.roles)
       return { rows, total, nextCursor: nextCursorOf(page, total) }
     }),
   ]

@@ -9,6 +9,7 @@ import type { FacilityService } from '../facility/index.ts'
 import type { RecordedFact } from './recorded-fact.entity.ts'
 
 const detailOf = {
+  'weight.strike': animalRefusals.strikeOwnWeight,
   'death.strike': animalRefusals.strikeOwnDeath,
   'move.strike': animalRefusals.strikeOwnMove,
   'dose.strike': doseWords.strikeOwn,
@@ -16,7 +17,7 @@ const detailOf = {
 
 /**
  * Whether this person may strike a row out. A slip of the hand is taken back by whoever made it, on the day of it; later,
- * others rest on the record (clocks, counts, tracing), and the roles that answer for it decide.
+ * others rest on the record (clocks, counts, doses, tracing), and the roles that answer for it decide.
  */
 export async function checkMayStrike(
   parts: { facility: FacilityService },

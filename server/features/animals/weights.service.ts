@@ -17,6 +17,7 @@ import * as repository from './ledgers.repository.ts'
 import { subjectOf } from './moves.service.ts'
 import type { MoveParts, Moves } from './moves.service.ts'
 import { refuseField } from './refuse.ts'
+import { checkMayStrike } from './strikes.ts'
 import { readTaxa } from './taxa.reads.ts'
 
 export interface WeightRequest {
@@ -135,6 +136,7 @@ export function createWeights(parts: MoveParts & { moves: Moves }) {
         const weight = await repository.findWeight(tx, id)
         if (weight?.animalId !== animal.id) throw new Problem('not-found')
         if (await repository.isStruck(tx, 'weightId', id)) return
+        await checkMayStrike(parts, tx, 'weight.strike', weight)
         await repository.strike(tx, { id: parts.ids.next(), what: 'weightId', rowId: id, reason })
         tx.audit({
           action: 'animal.strike-weight',

@@ -1,11 +1,12 @@
 import * as notices from '../../../shared/contracts/notices.contract.ts'
 import * as contracts from '../../../shared/contracts/observations.contract.ts'
+import { readsClinical } from '../../../shared/domain/permissions/reads-clinical.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { BodiesService } from './bodies.service.ts'
 import type { NoticesService } from './notices.service.ts'
 import type { ObservationQueries } from './observations.queries.ts'
-import { readsClinical, withholdFromObservation } from './withhold-clinical.ts'
+import { withholdFromObservation } from './withhold-clinical.ts'
 import type { ObservationsService } from './observations.service.ts'
 
 /** Observations, the round, and urgent calls. */

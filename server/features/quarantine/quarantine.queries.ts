@@ -6,6 +6,7 @@ import type { ProtocolVersion } from '../../../shared/contracts/protocols.contra
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import { plainText } from '../../../shared/domain/plain-text.ts'
+import { readsClinical } from '../../../shared/domain/permissions/reads-clinical.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
@@ -26,7 +27,7 @@ import { presentProtocol } from './protocols.present.ts'
 import { readProtocolVersions } from './protocols.reads.ts'
 import { isLive, readClocks } from './read-clocks.ts'
 import type { ClockFacts, WantedCases } from './read-clocks.ts'
-import { readsClinical, withholdFromRow } from './withhold-clinical.ts'
+import { withholdFromRow } from './withhold-clinical.ts'
 import { readSignedEvent } from './read-signed-event.ts'
 
 type Board = ReplyOf<typeof contracts.listCases>

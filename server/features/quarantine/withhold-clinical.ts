@@ -1,8 +1,6 @@
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
 import type { CaseRow, ClockReasonView } from '../../../shared/contracts/quarantine-primitives.ts'
 import type { Observation } from '../../../shared/contracts/observations.contract.ts'
-import { decide } from '../../../shared/domain/permissions/decide.ts'
-import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import { clinicalWords } from '../../../shared/messages/quarantine-records.ts'
 
 const { withheld } = clinicalWords
@@ -21,9 +19,6 @@ function withholdReason<R extends ClockReasonView>(reason: R): R {
   ])
   return { ...reason, params: Object.fromEntries(params) }
 }
-
-/** Whether somebody reads the clinical words of quarantine; whoever does not still sees every case and its clock. */
-export const readsClinical = (roles: readonly Role[]): boolean => decide('chart.read', roles).allowed
 
 /** A case on the board without clinical words. */
 export function withholdFromRow(row: CaseRow): CaseRow {

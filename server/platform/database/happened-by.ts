@@ -1,4 +1,4 @@
-/** How far a phone's clock may be ahead: later times are refused when they are entered. */
+/** How far a phone's clock may be ahead: later times are refused when they are entered. The one rule for fast clocks. */
 export const clockSkewMs = 5 * 60_000
 
 /**
@@ -10,7 +10,7 @@ export const clockSkewMs = 5 * 60_000
  */
 export function happenedBy(row: string, param: string): string {
   return `(${row}.happened_at <= ${param}::timestamptz
-    OR (${row}.happened_at <= ${param}::timestamptz + interval '5 minutes' AND ${row}.recorded_at <= ${param}::timestamptz))`
+    OR (${row}.happened_at <= ${param}::timestamptz + interval '${String(clockSkewMs)} ms' AND ${row}.recorded_at <= ${param}::timestamptz))`
 }
 
 /** The time of such a row as seen from the instant: never ahead of it. */

@@ -2,9 +2,6 @@ import { problemTitles } from '../../../shared/messages/problems.ts'
 import { clockSkewMs } from '../database/happened-by.ts'
 import { Problem } from './problem.ts'
 
-/** The instant at which everything recorded so far has happened, also by a clock that goes ahead: what "now" is read at. */
-export const latestRecorded = (now: Date): Date => new Date(now.getTime() + clockSkewMs)
-
 /**
  * When somebody stopped something: as they say, or now where their clock goes ahead. Stopping is never refused, and what
  * is stopped was stopped by now.

@@ -62,6 +62,7 @@ export const permissions = {
   'chart.read': row('yes', 'yes', 'summary-only', 'summary-only', 'no'),
   'chart.write': row('yes', 'no', 'no', 'no', 'no'),
   'weight.record': row('yes', 'yes', 'yes', 'no', 'no'),
+  'weight.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
   'sample.take': row('yes', 'yes', 'yes', 'no', 'no'),
   'result.enter': row('yes', 'yes', 'no', 'no', 'no'),
   'water.record': row('yes', 'yes', 'yes', 'no', 'no'),

@@ -38,6 +38,7 @@ export function WeightPane({
   const [striking, setStriking] = useState<ToStrike | null>(null)
   const preferred = usePreference('massUnit')
   const may = useMay('weight.record')
+  const mayStrike = useMay('weight.strike')
   const { newestWeight: newest, weightBand: band } = animal
   const change = weightChange(weights ?? [], preferred)
 
@@ -99,7 +100,7 @@ export function WeightPane({
       {listed && weights ? (
         <DataTable
           label={words.everyWeight}
-          columns={columnsOf({ zone, now, preferred, onStrike: may.allowed ? setStriking : undefined })}
+          columns={columnsOf({ zone, now, preferred, onStrike: mayStrike.allowed ? setStriking : undefined })}
           rows={weights}
           rowKey={(row) => row.id}
           paging={{ kind: 'local', size: 15 }}
