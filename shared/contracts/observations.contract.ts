@@ -147,11 +147,12 @@ export const voidObservation = contract({
   method: 'post',
   path: '/observations/:id/void',
   action: 'observation.flag',
-  summary: 'Strike out an observation made by mistake; it stays readable, and so do deaths recorded with it',
+  summary:
+    'Strike out an observation made by mistake; it stays readable. Its bodies without a name leave the clocks; deaths of named animals stand until they are struck out themselves',
   params: z.strictObject({ id: RecordId }),
   body: z.strictObject({ reason: Reason }),
   reply: { 200: Observation },
-  problems: ['not-found', 'already-void', 'may-not'],
+  problems: ['not-found', 'already-void', 'may-not', 'cause-signed'],
   idempotent: 'by-key',
 })
 

@@ -1,21 +1,22 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/observations.contract.ts'
 import { observationDetails } from '../../../shared/messages/quarantine-refusals.ts'
-import type { Transactions, Tx } from '../../platform/database/transactions.ts'
+import type { Transactions } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { CaseWriter, CaseWriterParts } from './case-writer.ts'
 import type { ObservationRow } from './observation.entity.ts'
 import * as repository from './observations.repository.ts'
+import type { UnnamedBodies } from './unnamed-bodies.ts'
 
 type Given = BodyOf<typeof contracts.nameBodies>
 
 /** Bodies that an observation could not name: whose they were, found out later. */
 export function createBodiesService(
-  parts: CaseWriterParts & { transactions: Transactions; writer: CaseWriter },
+  parts: CaseWriterParts & { transactions: Transactions; writer: CaseWriter; unnamed: UnnamedBodies },
 ) {
-  const { animals, writer } = parts
+  const { animals, unnamed, writer } = parts
 
   function check(row: ObservationRow, given: Given): number {
     const named = given.deaths.reduce((sum, { count }) => sum + count, 0)
@@ -33,37 +34,6 @@ export function createBodiesService(
     return named
   }
 
-  /** In a case they stood as deaths of nobody; now each is a death of its animal, and what is left stays as it was. */
-  async function takeFromCase(tx: Tx, row: ObservationRow, named: number): Promise<string | null> {
-    const standing = await repository.findBodiesEvent(tx, row.id)
-    if (!standing || named === 0) return null
-    if (standing.isSigned)
-      throw new Problem('cause-signed', {
-        detail: observationDetails.bodiesSigned({ number: standing.number }),
-      })
-    const { head } = await writer.lock(tx, standing.number)
-    const now = await writer.timesOf(tx, { happenedAt: tx.at.toISOString() })
-    await writer.write(
-      tx,
-      head,
-      {
-        id: parts.ids.next(),
-        facts: { kind: 'voided', voidsEventId: standing.id },
-        reason: observationDetails.bodiesNamed,
-      },
-      now,
-    )
-    const left = row.unassignedDead - named
-    if (left > 0)
-      await writer.write(
-        tx,
-        head,
-        { id: parts.ids.next(), facts: { kind: 'death', deathCount: left }, observationId: row.id },
-        { ...now, happenedAt: row.happenedAt, happenedOn: row.happenedOn },
-      )
-    return head.id
-  }
-
   return {
     /** Names the bodies of an observation, once; what nobody will ever know is explained in words. */
     async nameBodies(context: RequestContext, observationId: string, given: Given): Promise<void> {
@@ -79,12 +49,20 @@ export function createBodiesService(
           recordedAt: tx.at,
           recordedBy: tx.actor.personId,
         }
+        const heads = await unnamed.lock(tx, observationId)
         const earlier = await repository.findBodies(tx, observationId)
         if (earlier && earlier.id !== given.id) throw new Problem('already-explained')
         if (row.unassignedDead === 0) throw new Problem('already-explained')
         if (await repository.isVoided(tx, observationId)) throw new Problem('already-void')
         if (!(await repository.insertBodies(tx, bodies)).created) return
-        const caseId = await takeFromCase(tx, row, named)
+        // In the cases they stood as deaths of nobody; now each is a death of its animal, in its own case only, and what
+        // is left stays where it was
+        if (named > 0) {
+          await unnamed.withdraw(tx, heads, { observationId, reason: observationDetails.bodiesNamed })
+          const { happenedAt, happenedOn } = row
+          const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
+          await unnamed.enter(tx, heads, { count: row.unassignedDead - named, observationId }, times)
+        }
         for (const [i, death] of given.deaths.entries()) {
           try {
             await animals.service.postDeaths(tx, death.accession, {
@@ -112,7 +90,7 @@ export function createBodiesService(
             reason: given.reason,
           },
         })
-        if (caseId !== null) await writer.settle(tx, caseId)
+        if (heads.length > 0) await writer.settle(tx, ...heads.map(({ id }) => id))
       })
     },
   }

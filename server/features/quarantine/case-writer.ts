@@ -1,5 +1,6 @@
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { quarantineRefusals } from '../../../shared/messages/quarantine-refusals.ts'
+import { clockSkewMs } from '../../platform/database/happened-by.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Ids } from '../../platform/ids.ts'
@@ -8,7 +9,7 @@ import type { FacilityService, FactTimes } from '../facility/index.ts'
 import type { WaterQuestions } from '../water/index.ts'
 import type { CaseEventFacts } from './case-event-facts.ts'
 import type { CaseReadRow } from './case-facts.reads.ts'
-import { findCaseId } from './case-facts.reads.ts'
+import { findCaseId, readCases } from './case-facts.reads.ts'
 import * as repository from './cases.repository.ts'
 import { readClocks, readLockSet } from './read-clocks.ts'
 import type { ClockFacts } from './read-clocks.ts'
@@ -44,8 +45,6 @@ function auditOf(facts: CaseEventFacts): Record<string, Json> {
   return JSON.parse(JSON.stringify(facts)) as Record<string, Json>
 }
 
-const allowedAheadMs = 5 * 60_000
-
 /** The columns of a recorded fact. */
 export const stampsOf = ({ happenedAt, happenedOn, recordedAt, recordedBy }: FactTimes): FactTimes => ({
   happenedAt,
@@ -56,12 +55,35 @@ export const stampsOf = ({ happenedAt, happenedOn, recordedAt, recordedBy }: Fac
 
 /** How every change of a case is made: lock, read, write the event, settle what follows from it. */
 export function createCaseWriter(parts: CaseWriterParts) {
-  async function factsOf(tx: Tx, caseId: string): Promise<ClockFacts> {
-    return readClocks(parts, tx.manager, [caseId], { asOf: tx.at, zone: await parts.facility.zone(tx) })
+  async function factsOf(tx: Tx, ...caseIds: string[]): Promise<ClockFacts> {
+    return readClocks(parts, tx.manager, caseIds, { asOf: tx.at, zone: await parts.facility.zone(tx) })
+  }
+
+  /** Animals before cases, each in the order of their ids, so that two changes follow each other. */
+  async function takeLocks(tx: Tx, caseIds: readonly string[], others: readonly string[]): Promise<void> {
+    const set = await readLockSet(parts, tx.manager, caseIds, tx.at)
+    await repository.lockAnimals(tx, [...new Set([...set.animalIds, ...others])])
+    await repository.lockCases(tx, set.caseIds)
   }
 
   return {
     factsOf,
+
+    /**
+     * Locks several cases at once, with those on their water and all their animals.
+     *
+     * @param others animals that the change concerns besides
+     * @returns their heads, by number; none where there are none
+     */
+    async lockAll(
+      tx: Tx,
+      caseIds: readonly string[],
+      others: readonly string[] = [],
+    ): Promise<CaseReadRow[]> {
+      if (caseIds.length === 0) return []
+      await takeLocks(tx, caseIds, others)
+      return readCases(tx.manager, caseIds)
+    },
 
     /**
      * Locks a case with those on its water and their animals, and reads it.
@@ -72,9 +94,7 @@ export function createCaseWriter(parts: CaseWriterParts) {
     async lock(tx: Tx, number: string, others: readonly string[] = []): Promise<LockedCase> {
       const id = await findCaseId(tx.manager, number)
       if (id === null) throw new Problem('not-found')
-      const { animalIds, caseIds } = await readLockSet(parts, tx.manager, id, tx.at)
-      await repository.lockAnimals(tx, [...animalIds, ...others])
-      await repository.lockCases(tx, caseIds)
+      await takeLocks(tx, [id], others)
       const facts = await factsOf(tx, id)
       const head = facts.cases.find((one) => one.id === id)
       if (!head) throw new Problem('not-found')
@@ -93,8 +113,8 @@ export function createCaseWriter(parts: CaseWriterParts) {
     ): Promise<FactTimes & { doubtful: boolean }> {
       const { happenedAt, origin = 'online' } = given
       const aheadMs = new Date(happenedAt).getTime() - tx.at.getTime()
-      const doubtful = origin === 'outbox' && aheadMs > allowedAheadMs
-      const isNow = aheadMs > 0 && (doubtful || aheadMs <= allowedAheadMs)
+      const doubtful = origin === 'outbox' && aheadMs > clockSkewMs
+      const isNow = aheadMs > 0 && (doubtful || aheadMs <= clockSkewMs)
       const times = await parts.facility.timesOf(tx, isNow ? tx.at.toISOString() : happenedAt, pointer)
       return { ...times, doubtful }
     },
@@ -140,8 +160,8 @@ export function createCaseWriter(parts: CaseWriterParts) {
     },
 
     /** After a change: movement locks follow the clocks. */
-    async settle(tx: Tx, caseId: string): Promise<ClockFacts> {
-      const facts = await factsOf(tx, caseId)
+    async settle(tx: Tx, ...caseIds: string[]): Promise<ClockFacts> {
+      const facts = await factsOf(tx, ...caseIds)
       await settleLocks(parts, tx, facts)
       return facts
     },

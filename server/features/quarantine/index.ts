@@ -35,6 +35,7 @@ import { createProtocolsService } from './protocols.service.ts'
 import { createQuarantineQueries } from './quarantine.queries.ts'
 import { quarantineRoutes } from './quarantine.routes.ts'
 import { createTreatmentsService } from './treatments.service.ts'
+import { createUnnamedBodies } from './unnamed-bodies.ts'
 
 export type { TreatmentsService } from './treatments.service.ts'
 export type { CaseEventFacts } from './case-event-facts.ts'
@@ -79,8 +80,9 @@ export function createQuarantine(
   const treatments = createTreatmentsService({ ...parts, events })
   const protocols = createProtocolsService(parts)
   const notices = createNoticesService(parts)
-  const observations = createObservationsService({ ...parts, writer, notices })
-  const bodies = createBodiesService({ ...parts, writer })
+  const unnamed = createUnnamedBodies({ ...parts, writer })
+  const observations = createObservationsService({ ...parts, writer, notices, unnamed })
+  const bodies = createBodiesService({ ...parts, writer, unnamed })
   const queries = createQuarantineQueries(parts)
   const observationQueries = createObservationQueries(parts)
   const clearance = createClearanceService({ ...parts, writer })

@@ -65,18 +65,23 @@ export function insertBodies(tx: Tx, row: ObservationBodiesRow): Promise<{ creat
   return insertOnce(tx, ObservationBodiesRow, row, ['observationId', 'namedCount', 'reason'])
 }
 
-/** The event of a case that stands for bodies that the observation could not name; null where there is none. */
-export async function findBodiesEvent(
-  tx: Tx,
-  observationId: string,
-): Promise<{ id: string; number: string; isSigned: boolean } | null> {
-  const [row]: { id: string; number: string; is_signed: boolean }[] = await tx.manager.query(
-    `SELECT e.id, c.number,
+export interface BodiesEventRow {
+  id: string
+  case_id: string
+  number: string
+  /** A veterinarian signed the cause of these deaths in that case. */
+  is_signed: boolean
+}
+
+/** The events that stand for bodies that the observation could not name: one in each case that lived there. */
+export function findBodiesEvents(tx: Tx, observationId: string): Promise<BodiesEventRow[]> {
+  return tx.manager.query(
+    `SELECT e.id, e.case_id, c.number,
             EXISTS (SELECT 1 FROM live_case_events s
                      WHERE s.kind = 'death-cause-signed' AND s.facts ->> 'deathEventId' = e.id::text) AS is_signed
        FROM live_case_events e JOIN quarantine_cases c ON c.id = e.case_id
-      WHERE e.observation_id = $1 AND e.kind = 'death'`,
+      WHERE e.observation_id = $1 AND e.kind = 'death'
+      ORDER BY c.number, e.id`,
     [observationId],
   )
-  return row ? { id: row.id, number: row.number, isSigned: row.is_signed } : null
 }

@@ -8,6 +8,7 @@ import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
+import { checkMayStrike } from '../animals/index.ts'
 import type { AnimalFacts } from '../animals/index.ts'
 import type { Enclosures } from '../enclosures/index.ts'
 import { stampsOf } from './case-writer.ts'
@@ -16,6 +17,7 @@ import * as cases from './cases.repository.ts'
 import type { NoticesService } from './notices.service.ts'
 import type { ObservationRow } from './observation.entity.ts'
 import * as repository from './observations.repository.ts'
+import type { UnnamedBodies } from './unnamed-bodies.ts'
 
 type Given = BodyOf<typeof contracts.recordObservation>
 
@@ -29,6 +31,7 @@ export function createObservationsService(
     enclosures: Enclosures
     writer: CaseWriter
     notices: NoticesService
+    unnamed: UnnamedBodies
   },
 ) {
   const { animals, writer } = parts
@@ -124,8 +127,15 @@ export function createObservationsService(
 
         const heads = await casesThere(tx, here, times.happenedAt)
         const [first] = heads
-        // A look changes no clock unless bodies are found: only then the case and its animals are locked
-        const locked = first && (given.foundDead ?? 0) > 0 ? await writer.lock(tx, first.number) : null
+        // A look changes no clock unless bodies are found: only then the cases and their animals are locked
+        const locked =
+          (given.foundDead ?? 0) > 0
+            ? await writer.lockAll(
+                tx,
+                heads.map(({ id }) => id),
+                here.map(({ animalId }) => animalId),
+              )
+            : []
         await repository.insertObservation(
           tx,
           row,
@@ -142,19 +152,9 @@ export function createObservationsService(
           await repository.linkDeath(tx, given.id, death.id)
         }
         await postCount(tx, given, here, at)
-        if (row.unassignedDead > 0 && locked)
-          await writer.write(
-            tx,
-            locked.head,
-            {
-              id: parts.ids.next(),
-              facts: { kind: 'death', deathCount: row.unassignedDead },
-              observationId: given.id,
-              origin: given.origin,
-              device: given.device,
-            },
-            times,
-          )
+        const { origin, device } = given
+        const unnamed = { count: row.unassignedDead, observationId: given.id, origin, device }
+        await parts.unnamed.enter(tx, locked, unnamed, stampsOf(times))
         const words = sayObservation(given).join('. ')
         tx.audit({
           action: 'observation.record',
@@ -206,7 +206,10 @@ export function createObservationsService(
       })
     },
 
-    /** Strikes out an observation; whoever made it, or a veterinarian. */
+    /**
+     * Strikes out an observation; whoever made it, or a veterinarian. Bodies without a name leave every clock that they
+     * stood in; the death of a named animal is a record of its own and is struck out there.
+     */
     async strike(context: RequestContext, id: string, reason: string): Promise<void> {
       await parts.transactions.inTransaction(context, async (tx) => {
         const row = await repository.findObservation(tx, id)
@@ -214,6 +217,9 @@ export function createObservationsService(
         const own = row.recordedBy !== null && row.recordedBy === tx.actor.personId
         if (!own && !decide('chart.write', tx.actor.roles).allowed)
           throw new Problem('may-not', { detail: observationDetails.ownOrVet })
+        const heads = await parts.unnamed.lock(tx, id)
+        // the clocks rest on its bodies: they are taken out by whoever may strike out a death
+        if (heads.length > 0) await checkMayStrike(parts, tx, 'death.strike', row)
         await repository.insertVoid(tx, {
           id: parts.ids.next(),
           observationId: id,
@@ -227,6 +233,8 @@ export function createObservationsService(
           after: { reason },
           clinical: true,
         })
+        await parts.unnamed.withdraw(tx, heads, { observationId: id, reason })
+        if (heads.length > 0) await writer.settle(tx, ...heads.map((head) => head.id))
       })
     },
   }

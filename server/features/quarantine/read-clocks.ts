@@ -169,9 +169,9 @@ export async function findCasesIn(
   return cases.filter(({ id }) => ids.has(id)).map(({ id, number }) => ({ id, number }))
 }
 
-/** Ids of the cases that share water with one, itself among them, and of all their animals: what a write locks. */
-export async function readLockSet(parts: ClockParts, db: Db, caseId: string, asOf: Date) {
-  const { cases, batches } = await readComponent(parts, db, [caseId], asOf)
+/** Ids of the cases that share water with these, themselves among them, and of all their animals: what a write locks. */
+export async function readLockSet(parts: ClockParts, db: Db, caseIds: readonly string[], asOf: Date) {
+  const { cases, batches } = await readComponent(parts, db, caseIds, asOf)
   return {
     caseIds: cases.map(({ id }) => id).sort(),
     animalIds: [...new Set(batches.map((row) => row.animal_id))].sort(),
