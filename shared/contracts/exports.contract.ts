@@ -26,6 +26,14 @@ export const HistoryPermit = z.object({
 })
 export type HistoryPermit = z.infer<typeof HistoryPermit>
 
+/** A place outside the house, as the registrar knows it. */
+const Site = z.object({
+  locality: Text.describe('Where'),
+  latitude: z.number().nullable().describe('Decimal degrees, WGS 84'),
+  longitude: z.number().nullable().describe('Decimal degrees, WGS 84'),
+  uncertaintyMetres: z.number().nullable().describe('Radius of uncertainty in metres'),
+})
+
 export const HistoryEvent = z.object({
   eventId: z.string().describe('Id of the line in the ledger'),
   kind: z.string().describe('What happened: a kind of the count ledger, move, counted or estimated'),
@@ -40,6 +48,7 @@ export const HistoryEvent = z.object({
     .describe('What was found when somebody counted or estimated'),
   from: Place.describe('Where it left'),
   to: Place.describe('Where it went'),
+  site: Site.optional().describe('Where it was released or given away, where that is known'),
   otherAccession: Text.describe('The other half of a split or merge'),
   transaction: Text.describe('Number of the transaction'),
   counterparty: Text.describe('The other party'),

@@ -39,6 +39,7 @@ export function sayEventDetails(event: HistoryEvent): string[] {
       : words.ofAnimals({ delta: event.delta, after: event.countAfter }),
     event.from === null || isMove ? null : words.leftFrom({ place: sayPlace(event.from) ?? '' }),
     event.to === null || isMove ? null : words.placedAt({ place: sayPlace(event.to) ?? '' }),
+    sitePhrase(event.site),
     event.transaction === null ? null : words.transaction({ number: event.transaction }),
     event.reference === null ? null : words.reference({ reference: event.reference }),
     event.theirNumber === null ? null : words.theirNumber({ number: event.theirNumber }),
@@ -50,6 +51,15 @@ export function sayEventDetails(event: HistoryEvent): string[] {
     event.note,
     event.voided === null ? null : words.struck({ reason: event.voided.reason }),
   ].filter((sentence) => sentence !== null)
+}
+
+/** Where animals were released, with the position where that is known. */
+function sitePhrase(site: HistoryEvent['site']): string | null {
+  if (!site) return null
+  const { locality, latitude, longitude, uncertaintyMetres: uncertainty } = site
+  const position =
+    latitude === null || longitude === null ? null : words.coordinates({ latitude, longitude, uncertainty })
+  return words.site({ where: [locality, position].filter((part) => part !== null).join(', ') })
 }
 
 /** What is known of the time before it was kept here. */

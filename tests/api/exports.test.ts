@@ -22,6 +22,7 @@ beforeAll(async () => {
 })
 afterAll(() => api.stop())
 
+const site = { locality: 'Ledder Marsh, pier 2', latitude: 44.7, longitude: -63.5, uncertaintyMetres: 50 }
 /** Worked by hand: 24 bought, 1 dead, 8 taken out, 4 sold, 5 hatched, and a birth of 3 struck out: 16 are left. */
 async function aHistory() {
   const taxonId = await aStingray(api)
@@ -91,6 +92,7 @@ async function aHistory() {
     kind: 'sale',
     on: '2026-11',
     counterpartyId: dealer,
+    place: site,
     lines: [{ id: api.nextId(), animalId: line.animalId, count: 4 }],
   })
   await post('births', { count: 5, happenedAt: '2026-11-10T12:00:00Z' })
@@ -186,7 +188,7 @@ describe('an acquisition history', () => {
       note: 'cleared',
     })
     expect(struck?.voided).toMatchObject({ reason: 'Counted twice', by: 'Test registrar' })
-    expect(sale).toMatchObject({ on: '2026-11', exact: false })
+    expect(sale).toMatchObject({ on: '2026-11', exact: false, site })
   })
 
   it('opens and closes a period with the counts of its ends', async () => {
@@ -242,7 +244,8 @@ describe('the history as CSV', () => {
       permits: 'Norrell Sound Fisheries NS-26-017: 24',
       recorded_by: 'Test registrar',
     })
-    expect(rows.at(-1)).toMatchObject({ event: 'sale', event_date: '2026-11', count_change: '-4' })
+    const sale = { event: 'sale', event_date: '2026-11', count_change: '-4', place: site.locality }
+    expect(rows.at(-1)).toMatchObject({ ...sale, latitude: '44.7', uncertainty_metres: '50' })
   })
 
   it('guards formulas and marks its encoding in the variant for spreadsheets; negative numbers stay numbers', async () => {
@@ -269,6 +272,7 @@ describe('the history as CSV', () => {
       'dwc:coordinateUncertaintyInMeters': '500',
       'dwc:institutionCode': 'Harrow Point Sea Hall',
     })
+    expect(rows.at(-1)?.['dwc:locality']).toBe(site.locality)
     expect(JSON.parse(rows[0]?.['dwc:dynamicProperties'] ?? '{}')).toMatchObject({ reference: 'INV-2231' })
   })
 })
@@ -287,6 +291,7 @@ describe('the history as JSON', () => {
       history: { accession, opening: 0, gained: 29, lost: 13, closing: 16 },
     })
     expect(sum(file.history.totals.map((total) => total.delta))).toBe(16)
+    expect(file.history.events.at(-1)?.site).toEqual(site)
     expect(row.reason).toBe('Yearly loan report')
   })
 })
@@ -309,6 +314,7 @@ describe('the history as pages', () => {
       `Taken out as ${splitAccession}`,
       `Moved from ${quarantine.code} to ${display.code}`,
       'Nov 2026 Sold to =Ledder',
+      'At Ledder Marsh, pier 2, 44.7° N, 63.5° W (WGS 84), within 50 m.',
       'Struck out: Counted twice',
       'Sum of the period + 16 16',
       'Collecting permit NS-26-017',

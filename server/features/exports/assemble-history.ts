@@ -68,6 +68,14 @@ export function custodyOf(facts: CustodyFacts): CustodyEvent[] {
   return listCustody(entriesOf(facts), moves, statementsOf(facts))
 }
 
+/** Where animals went outside the house; where they were collected is told of the time before: see `originsOf`. */
+function siteOf(transaction: TransactionReadRow | undefined): HistoryEvent['site'] {
+  if (transaction?.way !== 'out') return undefined
+  const { place: locality, latitude, longitude, uncertainty_metres: uncertaintyMetres } = transaction
+  if (locality === null && latitude === null) return undefined
+  return { locality, latitude, longitude, uncertaintyMetres }
+}
+
 /** An event as people and files read it: with places, the other party, permits and papers. */
 export function describeEvent(facts: CustodyFacts, event: BalancedEvent): HistoryEvent {
   const entry = facts.entries.find((row) => row.id === event.eventId)
@@ -75,6 +83,7 @@ export function describeEvent(facts: CustodyFacts, event: BalancedEvent): Histor
   if (!row) throw new Error(`event ${event.eventId} has no row`)
   const line = facts.lines.find((one) => one.count_entry_id === event.eventId)
   const transaction = facts.transactions.find((one) => one.id === line?.transaction_id)
+  const site = siteOf(transaction)
   const place = (id: string | null) => (id === null ? null : (facts.enclosures.get(id) ?? null))
   return {
     eventId: event.eventId,
@@ -87,6 +96,7 @@ export function describeEvent(facts: CustodyFacts, event: BalancedEvent): Histor
     found: event.found ?? null,
     from: place(event.fromEnclosureId),
     to: place(event.toEnclosureId),
+    ...(site ? { site } : {}),
     otherAccession: entry?.other_accession ?? null,
     transaction: transaction?.number ?? null,
     counterparty: transaction?.counterparty_name ?? null,

@@ -57,39 +57,43 @@ export function historyDarwinCore(content: HistoryContent, facility: string, zon
     ...content.identifiers.map((mark) => mark.value),
     ...content.events.flatMap((event) => event.theirNumber ?? []),
   ].join(' | ')
-  const origin = content.origins.find((one) => one.kind === 'collected')
+  const collected = content.origins.find((one) => one.kind === 'collected')
   return {
     variant: 'literal',
     header: darwinCoreColumns,
     rows: content.events
       .filter((event) => event.voided === null)
-      .map((event) => [
-        `urn:uuid:${event.eventId}`,
-        'LivingSpecimen',
-        facility,
-        content.owner ?? facility,
-        content.accession,
-        others,
-        `urn:uuid:${content.animalId}`,
-        content.name,
-        content.form === 'individual' ? 'multicellular organism' : 'group',
-        content.scientificName,
-        content.commonName,
-        content.sex,
-        content.lifeStage,
-        event.countAfter,
-        event.eventId,
-        event.kind,
-        eventDateOf(event, zone),
-        event.recordedBy,
-        origin?.locality ?? null,
-        origin?.latitude ?? null,
-        origin?.longitude ?? null,
-        origin?.latitude == null ? null : 'WGS84',
-        origin?.uncertaintyMetres ?? null,
-        event.countAfter === 0 ? event.kind : 'in collection',
-        event.note,
-        restOf(event),
-      ]),
+      .map((event) => {
+        // of what was released, where that was; of all else, where it came from
+        const where = event.site ?? collected
+        return [
+          `urn:uuid:${event.eventId}`,
+          'LivingSpecimen',
+          facility,
+          content.owner ?? facility,
+          content.accession,
+          others,
+          `urn:uuid:${content.animalId}`,
+          content.name,
+          content.form === 'individual' ? 'multicellular organism' : 'group',
+          content.scientificName,
+          content.commonName,
+          content.sex,
+          content.lifeStage,
+          event.countAfter,
+          event.eventId,
+          event.kind,
+          eventDateOf(event, zone),
+          event.recordedBy,
+          where?.locality ?? null,
+          where?.latitude ?? null,
+          where?.longitude ?? null,
+          where?.latitude == null ? null : 'WGS84',
+          where?.uncertaintyMetres ?? null,
+          event.countAfter === 0 ? event.kind : 'in collection',
+          event.note,
+          restOf(event),
+        ]
+      }),
   }
 }
