@@ -66,6 +66,9 @@ export const quarantineWords = defineMessages({
   log: 'Observations',
   logAllCases: 'all cases',
   logNone: 'Nothing has been observed yet.',
+  observationsShown: (p: { shown: number; total: number }) =>
+    `The newest ${String(p.shown)} of ${counted(p.total, 'observation', 'observations')}.`,
+  observationsOlder: 'Older observations',
   today: 'Today',
   dayOfCase: (p: { date: string; day: number }) => `${p.date}, day ${p.day}`,
   forVeterinarian: 'for the veterinarian',

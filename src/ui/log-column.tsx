@@ -25,6 +25,10 @@ export interface LogColumnProps {
   /** What the log is about, at the right of the heading. */
   about?: string
   entries: readonly LogEntry[]
+  /** How many there are in all, where not all are shown. */
+  count?: number
+  /** Below the last entry: how to see older ones. */
+  more?: ReactNode
   foot?: ReactNode
   /** A block above the entries, such as a handover note. */
   head?: ReactNode
@@ -34,7 +38,7 @@ export interface LogColumnProps {
  * The log: what happened, newest first, with an entry box at its foot. A column beside the work; at 1200 px and below a
  * strip that opens it as a drawer. `L` goes to it, `N` in it starts an entry.
  */
-export function LogColumn({ title, about, entries, foot, head }: LogColumnProps) {
+export function LogColumn({ title, about, entries, count, more, foot, head }: LogColumnProps) {
   const narrow = useMedia('(max-width: 1200px)')
   const [open, setOpen] = useState(false)
   const column = useRef<HTMLElement>(null)
@@ -54,7 +58,7 @@ export function LogColumn({ title, about, entries, foot, head }: LogColumnProps)
 
   const body = (
     <LogBody
-      {...{ title, about, entries, foot, head, column }}
+      {...{ title, about, entries, more, foot, head, column }}
       onClose={narrow ? () => setOpen(false) : undefined}
     />
   )
@@ -63,7 +67,7 @@ export function LogColumn({ title, about, entries, foot, head }: LogColumnProps)
     <>
       <button type="button" className="log-strip" onClick={() => setOpen(true)}>
         <Icon of={PanelRightOpen} />
-        {partWords.openLog({ title, count: entries.length })}
+        {partWords.openLog({ title, count: count ?? entries.length })}
       </button>
       {open ? (
         <Drawer label={title} onBack={() => setOpen(false)}>
@@ -78,6 +82,7 @@ function LogBody({
   title,
   about,
   entries,
+  more,
   foot,
   head,
   column,
@@ -130,6 +135,7 @@ function LogBody({
             </li>
           ))}
         </ol>
+        {more ? <div className="log-more">{more}</div> : null}
       </div>
       {foot ? <div className="log-foot">{foot}</div> : null}
     </aside>

@@ -1,6 +1,6 @@
 import { useState } from 'react'
 import type { ReactNode } from 'react'
-import { useQuery } from '@tanstack/react-query'
+import { useInfiniteQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
 import type { Observation } from '../../../shared/contracts/observations.contract.ts'
 import { daysBetween, wallClockOf } from '../../../shared/domain/time/facility-date.ts'
@@ -23,8 +23,6 @@ import { BodiesDialog } from './bodies-dialog.tsx'
 import { useReviewObservation } from './mutations.ts'
 import { observationsQuery } from './queries.ts'
 
-const shownAtMost = 60
-
 /** What was seen, the newest first: of one case, or of all with their numbers. A veterinarian notes here that they read it. */
 export function ObservationLog({
   number,
@@ -38,8 +36,12 @@ export function ObservationLog({
 }) {
   const { zone } = useMe().facility
   const { date: today } = useFacilityNow(zone)
-  const { data } = useQuery(observationsQuery(number, shownAtMost))
-  const rows = data?.rows ?? []
+  const { data, hasNextPage, fetchNextPage, isFetchingNextPage } = useInfiniteQuery(observationsQuery(number))
+  // an observation that came in between moves the others down: one may stand on two pages
+  const rows = [
+    ...new Map((data?.pages ?? []).flatMap((page) => page.rows.map((row) => [row.id, row]))).values(),
+  ]
+  const total = data?.pages.at(-1)?.total ?? 0
   let day = ''
   const entries = rows.map((row): LogEntry => {
     const { date, time } = wallClockOf(row.happenedAt, zone)
@@ -65,6 +67,17 @@ export function ObservationLog({
       about={number ?? words.logAllCases}
       entries={entries}
       head={data && rows.length === 0 ? <p className="t-2 pt-3">{words.logNone}</p> : undefined}
+      count={total}
+      more={
+        hasNextPage ? (
+          <>
+            <p className="t-note">{words.observationsShown({ shown: rows.length, total })}</p>
+            <Button disabled={isFetchingNextPage} onClick={() => void fetchNextPage()}>
+              {words.observationsOlder}
+            </Button>
+          </>
+        ) : undefined
+      }
       foot={foot}
     />
   )

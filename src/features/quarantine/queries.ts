@@ -1,4 +1,4 @@
-import { keepPreviousData, queryOptions } from '@tanstack/react-query'
+import { infiniteQueryOptions, keepPreviousData, queryOptions } from '@tanstack/react-query'
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
 import { listNotices } from '../../../shared/contracts/notices.contract.ts'
 import { listObservations } from '../../../shared/contracts/observations.contract.ts'
@@ -24,11 +24,19 @@ export const caseQuery = (number: string) =>
     queryFn: ({ signal }) => api(getCase, { params: { number }, signal }),
   })
 
-/** Observations of one case, or of all. */
-export const observationsQuery = (number: string | undefined, limit: number) =>
-  queryOptions({
-    queryKey: [...quarantineKey, 'observations', number ?? 'all', limit],
-    queryFn: ({ signal }) => api(listObservations, { query: { case: number, limit }, signal }),
+const observationsAtOnce = 60
+
+/** Observations of one case, or of all, the newest first; older ones a page at a time. */
+export const observationsQuery = (number: string | undefined) =>
+  infiniteQueryOptions({
+    queryKey: [...quarantineKey, 'observations', number ?? 'all'],
+    initialPageParam: undefined as string | undefined,
+    queryFn: ({ signal, pageParam }) =>
+      api(listObservations, {
+        query: { case: number, cursor: pageParam, limit: observationsAtOnce },
+        signal,
+      }),
+    getNextPageParam: (last) => last.nextCursor ?? undefined,
     placeholderData: keepPreviousData,
   })
 
