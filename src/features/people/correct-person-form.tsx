@@ -15,6 +15,7 @@ import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useCorrectPerson } from './mutations.ts'
 import { RolesField } from './roles-field.tsx'
+import { useTellUnsaved } from './use-tell-unsaved.ts'
 
 type Body = BodyOf<typeof correctPerson>
 
@@ -27,7 +28,15 @@ const bodyOf = (person: Person): Body => ({
 })
 
 /** Name, e-mail, roles and account of a person. A stale save keeps what was typed. */
-export function CorrectPersonForm({ person, onLoadNewer }: { person: Person; onLoadNewer: () => void }) {
+export function CorrectPersonForm({
+  person,
+  onLoadNewer,
+  onUnsaved,
+}: {
+  person: Person
+  onLoadNewer: () => void
+  onUnsaved: (unsaved: boolean) => void
+}) {
   const toast = useToast()
   const [refused, setRefused] = useState<string | undefined>()
   const [stale, setStale] = useState(false)
@@ -40,7 +49,8 @@ export function CorrectPersonForm({ person, onLoadNewer }: { person: Person; onL
     })),
     defaultValues: bodyOf(person),
   })
-  const { errors } = form.formState
+  const { errors, isDirty } = form.formState
+  useTellUnsaved(isDirty, onUnsaved)
   const submit = form.handleSubmit((typed) => {
     setRefused(undefined)
     setStale(false)

@@ -12,11 +12,20 @@ import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useEnterLicence } from './mutations.ts'
+import { useTellUnsaved } from './use-tell-unsaved.ts'
 
 type Body = BodyOf<typeof enterLicence>
 
 /** A licence as it stands on paper: who granted it, number, first and last day. */
-export function LicenceForm({ personId, onDone }: { personId: string; onDone: () => void }) {
+export function LicenceForm({
+  personId,
+  onDone,
+  onUnsaved,
+}: {
+  personId: string
+  onDone: () => void
+  onUnsaved: (unsaved: boolean) => void
+}) {
   const [id] = useState(newId)
   const [refused, setRefused] = useState<string | undefined>()
   const enter = useEnterLicence(personId)
@@ -30,7 +39,8 @@ export function LicenceForm({ personId, onDone }: { personId: string; onDone: ()
     })),
     defaultValues: { id, jurisdiction: '', number: '', validFrom: '', validUntil: '' },
   })
-  const { errors } = form.formState
+  const { errors, isDirty } = form.formState
+  useTellUnsaved(isDirty, onUnsaved)
   const submit = form.handleSubmit((typed) => {
     setRefused(undefined)
     enter.mutate(typed, {

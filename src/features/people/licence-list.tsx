@@ -8,7 +8,13 @@ import { LicenceForm } from './licence-form.tsx'
 import { VoidLicenceDialog } from './void-licence-dialog.tsx'
 
 /** Every licence ever entered, voided ones with their reason. */
-export function LicenceList({ person }: { person: Person }) {
+export function LicenceList({
+  person,
+  onUnsaved,
+}: {
+  person: Person
+  onUnsaved: (unsaved: boolean) => void
+}) {
   const [voiding, setVoiding] = useState<Licence | null>(null)
   const [adding, setAdding] = useState(false)
   return (
@@ -22,7 +28,9 @@ export function LicenceList({ person }: { person: Person }) {
         )}
       </div>
       <p className="hint">{peopleWords.licencesHint}</p>
-      {adding ? <LicenceForm personId={person.id} onDone={() => setAdding(false)} /> : null}
+      {adding ? (
+        <LicenceForm personId={person.id} onDone={() => setAdding(false)} onUnsaved={onUnsaved} />
+      ) : null}
       {person.licences.length === 0 ? <p className="t-2">{peopleWords.noLicences}</p> : null}
       <ul className="stack">
         {person.licences.map((licence) => (

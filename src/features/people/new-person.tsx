@@ -9,9 +9,11 @@ import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import { typedText } from '../../lib/typed-text.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
@@ -35,7 +37,7 @@ export function NewPerson() {
     })),
     defaultValues: { id, email: '', printedName: '', roles: [] },
   })
-  const { errors } = form.formState
+  const { errors, isDirty } = form.formState
   const submit = form.handleSubmit((typed) => {
     setRefused(undefined)
     enter.mutate(typed, {
@@ -47,6 +49,7 @@ export function NewPerson() {
     })
   })
   const entered = enter.data
+  const { blocker } = useLeaveGuard(isDirty && entered === undefined)
 
   return (
     <Sheet recipe="list">
@@ -98,6 +101,7 @@ export function NewPerson() {
           </form>
         )}
       </Area>
+      <LeaveQuestion blocker={blocker} />
     </Sheet>
   )
 }

@@ -7,9 +7,11 @@ import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
 import { QueryStanding } from '../../lib/query-standing.tsx'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { CorrectPersonForm } from './correct-person-form.tsx'
 import { LicenceList } from './licence-list.tsx'
@@ -22,6 +24,9 @@ export function PersonSheet({ id }: { id: string }) {
   const query = useQuery(personQuery(id))
   const [asking, setAsking] = useState<string | null>(null)
   const [loaded, setLoaded] = useState(0)
+  const [unsavedPerson, setUnsavedPerson] = useState(false)
+  const [unsavedLicence, setUnsavedLicence] = useState(false)
+  const { blocker } = useLeaveGuard(unsavedPerson || unsavedLicence)
   const issue = useIssueOneTimePassword(id)
   const person = query.data
 
@@ -60,11 +65,13 @@ export function PersonSheet({ id }: { id: string }) {
               key={`${person.id} ${String(loaded)}`}
               person={person}
               onLoadNewer={() => void query.refetch().then(() => setLoaded((n) => n + 1))}
+              onUnsaved={setUnsavedPerson}
             />
-            <LicenceList person={person} />
+            <LicenceList person={person} onUnsaved={setUnsavedLicence} />
           </>
         ) : null}
       </Area>
+      <LeaveQuestion blocker={blocker} />
       {asking && person ? (
         <Dialog
           question={peopleWords.oneTimeAsk({ name: person.printedName })}

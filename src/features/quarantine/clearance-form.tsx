@@ -11,12 +11,14 @@ import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
+import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { Button } from '../../ui/button.tsx'
 import { ButtonLink } from '../../ui/button-link.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Conditions } from '../../ui/condition-row.tsx'
 import { FlagWords } from '../../ui/flag-mark.tsx'
+import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { PasswordField } from '../../ui/password-field.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { SignatureBlock } from '../../ui/signature-block.tsx'
@@ -87,6 +89,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
   const toast = useToast()
   const [reason, setReason] = useState('')
   const [password, setPassword] = useState('')
+  const { blocker, letGo } = useLeaveGuard(reason.trim() !== '')
   const against = detail.unmet.length > 0
   const shut =
     against && reason.trim().length < shortestReason
@@ -106,6 +109,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
     setPassword('')
     if (!done) return
     toast({ words: words.clearDone({ number }) })
+    letGo()
     await navigate(paths.quarantineCase(number))
   }
 
@@ -174,6 +178,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
           <ButtonLink to={paths.quarantineCase(number)}>{words.backToCase}</ButtonLink>
         </div>
       </SignatureBlock>
+      <LeaveQuestion blocker={blocker} />
     </form>
   )
 }
