@@ -54,10 +54,12 @@ export function layCaseLabels(
   return labels
 }
 
-/** Centred on its mark, but never over the edge of the drawing or across the line of now. */
+/** Centred on its mark, but never over the edge of the drawing, nor across the line of now where there is room beside it. */
 function placeBeside(x: number, half: number, width: number, nowX: number): Pick<CaseLabel, 'x' | 'anchor'> {
   if (x - half < nowX && x + half > nowX) {
-    return x <= nowX + 1 ? { x: nowX - 10, anchor: 'end' } : { x: Math.max(nowX + 5, x - 8), anchor: 'start' }
+    const after = Math.max(nowX + 5, x - 8)
+    if (x <= nowX + 1 && nowX - 10 - 2 * half >= 2) return { x: nowX - 10, anchor: 'end' }
+    if (x > nowX + 1 && after + 2 * half <= width - 2) return { x: after, anchor: 'start' }
   }
   if (x - half < 2) return { x: 3, anchor: 'start' }
   if (x + half > width - 2) return { x: width - 3, anchor: 'end' }

@@ -216,8 +216,11 @@ const around = (x: number, y: number, half: number, rise: number): Box => ({
 })
 
 /** About how much room a text takes in the drawing. */
-export function textBox({ x, y, text, anchor }: Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'>): Box {
-  const width = text.length * letterPx
+export function textBox(
+  { x, y, text, anchor }: Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'>,
+  letter: number = letterPx,
+): Box {
+  const width = text.length * letter
   const x1 = anchor === 'start' ? x : anchor === 'end' ? x - width : x - width / 2
   return { x1, x2: x1 + width, y1: y - 9, y2: y + 2 }
 }

@@ -2,7 +2,9 @@ import { describe, expect, it, vi } from 'vitest'
 import { coastPath } from '../../../src/ui/passage/coast.ts'
 import { dayScale } from '../../../src/ui/passage/day-scale.ts'
 import { layCaseLabels } from '../../../src/ui/passage/case-labels.ts'
-import { layPassage } from '../../../src/ui/passage/passage-geometry.ts'
+import { harbourLines, labelWords, oldLegWords, wholeOf } from '../../../src/ui/passage/case-words.ts'
+import { nowLinePieces } from '../../../src/ui/passage/now-line.ts'
+import { layPassage, textBox } from '../../../src/ui/passage/passage-geometry.ts'
 import { PassageBoard } from '../../../src/ui/passage/passage-board.tsx'
 import { PassageCase } from '../../../src/ui/passage/passage-case.tsx'
 import { PassageTable } from '../../../src/ui/passage/passage-table.tsx'
@@ -173,6 +175,32 @@ describe('the geometry', () => {
     const due = labels.find((label) => label.words === 'skin scrape')
     expect(due).toMatchObject({ anchor: 'end', day: 'day 19', dayY: 158 })
     expect(due?.x).toBeCloseTo(course.nowX - 10, 5)
+  })
+
+  it('keeps labels in the drawing of a phone, and breaks the line of now where words stand', () => {
+    const width = 358
+    const view = ray({ today: '2026-04-28', harbour: { on: '2026-05-25', allMet: false } })
+    const scale = dayScale('2026-04-06', '2026-06-02', width)
+    const course = layPassage(view, scale, 136, 'case')
+    const labels = layCaseLabels(view, course.marks, 136, width, course.nowX, (day) => `day ${String(day)}`)
+    const words = [
+      ...course.oldLegs.flatMap((old) => oldLegWords(old, true, scale)),
+      ...labelWords(labels),
+      ...harbourLines(view, course, { width, courseY: 136, footY: 192 }),
+    ].map(wholeOf)
+    for (const label of labelWords(labels)) {
+      const { x1, x2 } = textBox(label)
+      expect([label.text, x1 >= 0, x2 <= width]).toEqual([label.text, true, true])
+    }
+    const onLine = words.filter((one) => {
+      const { x1, x2 } = textBox(one)
+      return x1 < course.nowX && course.nowX < x2
+    })
+    expect(onLine.map(({ text }) => text)).toContain('a ray joined')
+    const pieces = nowLinePieces(course.nowX, 0, 212, words)
+    for (const { text, y } of onLine)
+      expect([text, pieces.filter(({ y1, y2 }) => y1 < y && y2 > y - 8)]).toEqual([text, []])
+    expect(nowLinePieces(course.nowX, 0, 212, [])).toEqual([{ y1: 0, y2: 212 }])
   })
 })
 

@@ -1,0 +1,31 @@
+import { textBox } from './passage-geometry.ts'
+import type { CourseText } from './passage-geometry.ts'
+
+/** Words in the drawing of a case, with what their room is reckoned from. */
+export type CaseWords = Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'> & { sizePx: number }
+
+/** About how wide a letter is, of the height of its type. */
+const letterPart = 0.5
+const marginPx = 2
+
+/** The line of now in pieces: it is broken where words stand and crosses none of them. */
+export function nowLinePieces(
+  x: number,
+  from: number,
+  until: number,
+  words: readonly CaseWords[],
+): { y1: number; y2: number }[] {
+  const gaps = words
+    .map((one) => ({ one, box: textBox(one, one.sizePx * letterPart) }))
+    .filter(({ box }) => box.x1 - marginPx < x && x < box.x2 + marginPx)
+    .map(({ one }) => ({ y1: one.y - one.sizePx, y2: one.y + one.sizePx / 3 }))
+    .sort((a, b) => a.y1 - b.y1)
+  const pieces: { y1: number; y2: number }[] = []
+  let at = from
+  for (const gap of gaps) {
+    if (gap.y1 > at) pieces.push({ y1: at, y2: gap.y1 })
+    at = Math.max(at, gap.y2)
+  }
+  if (until > at) pieces.push({ y1: at, y2: until })
+  return pieces
+}
