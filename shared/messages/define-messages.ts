@@ -72,6 +72,6 @@ export function defineMessages<T extends Messages>(sentences: T): Readonly<T> {
 }
 
 /** "1 animal", "2 animals": the count with the right form of its noun. */
-export function counted(count: number, one: string, many: string): string {
-  return `${count.toLocaleString('en-GB')}\u00a0${count === 1 ? one : many}`
+export function counted(count: number | bigint, one: string, many: string): string {
+  return `${count.toLocaleString('en-GB')}\u00a0${Number(count) === 1 ? one : many}`
 }

@@ -1,7 +1,4 @@
-import { defineMessages } from './define-messages.ts'
-
-const counted = (count: number | bigint, one: string, several: string) =>
-  `${String(count)} ${Number(count) === 1 ? one : several}`
+import { counted, defineMessages } from './define-messages.ts'
 
 /** What is wrong with one value that was sent or typed, and what to do about it. */
 export const inputFaults = defineMessages({

@@ -9,8 +9,8 @@ describe('a shape that is refused', () => {
   it.each<[string, z.ZodType, unknown, string]>([
     ['an absent field', z.string(), undefined, 'Fill this in.'],
     ['an empty text', z.string().min(1), '', 'Fill this in.'],
-    ['a short text', z.string().min(3), 'ab', 'Use at least 3 characters.'],
-    ['a long text', z.string().max(2), 'abc', 'Use at most 2 characters.'],
+    ['a short text', z.string().min(3), 'ab', 'Use at least 3\u00a0characters.'],
+    ['a long text', z.string().max(2), 'abc', 'Use at most 2\u00a0characters.'],
     ['a text for a number', z.number(), 'many', 'Type a number, for example 44.62.'],
     ['a part of a whole', z.int(), 1.5, 'Type a whole number.'],
     ['none of a positive number', z.number().positive(), 0, 'Type a number above 0.'],

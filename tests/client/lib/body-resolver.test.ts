@@ -41,7 +41,9 @@ describe('a form checked by the body it sends', () => {
       { id: 'lines.2.count', label: 'label of lines.2.count', says: 'Type a whole number.' },
       { id: 'lines.3.count', label: 'label of lines.3.count', says: 'At least 1' },
     ])
-    expect(await ask({ name: 'too long', lines: [] })).toMatchObject([{ says: 'Use at most 5 characters.' }])
+    expect(await ask({ name: 'too long', lines: [] })).toMatchObject([
+      { says: 'Use at most 5\u00a0characters.' },
+    ])
   })
   it('asks for what the form needs though the schema would let it pass', async () => {
     expect(await ask({ name: 'alias', lines: [{ count: '3' }] })).toMatchObject([
