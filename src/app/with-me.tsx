@@ -6,8 +6,12 @@ import { MeContext, meQuery, personKey } from '../lib/me.ts'
 import { paths } from '../lib/paths.ts'
 import { meKey } from '../lib/query-client.ts'
 import { OtherPerson } from './other-person.tsx'
+import { SignInAgain } from './sign-in-again.tsx'
 
-/** Screens for somebody who is signed in. When the session ends, wherever that is noticed, it leads to sign-in and back. */
+/**
+ * Screens for somebody who is signed in. Signing out leads to sign-in; a session that ended elsewhere is asked for in
+ * place, so that nothing typed is lost.
+ */
 export function WithMe({ children }: { children: ReactNode }) {
   const { data: me } = useQuery(meQuery)
   const { pathname, search } = useLocation()
@@ -17,6 +21,7 @@ export function WithMe({ children }: { children: ReactNode }) {
     <MeContext value={me}>
       {children}
       <OtherPerson />
+      <SignInAgain />
     </MeContext>
   )
 }

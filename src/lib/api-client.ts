@@ -100,6 +100,7 @@ async function send(of: Address, call: Call): Promise<Response> {
   if (response.ok) return response
   const problem = await problemOf(response)
   if (problem.code === 'different-person') pagePerson.differs(String(problem.body['signed_in']))
+  if (problem.code === 'not-signed-in') pagePerson.sessionEnded()
   throw problem
 }
 

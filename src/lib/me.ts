@@ -48,13 +48,15 @@ export const meQuery = queryOptions({
     } catch (error) {
       if (isProblem(error, 'not-signed-in')) {
         keepPerson(null)
+        // the page stays that of whoever opened it, and asks for their password: see src/app/sign-in-again.tsx
+        if (before) return before
         pagePerson.drawnFor(null)
         return null
       }
       // no signal: whoever was signed in still is, for what is kept on this device; the server decides when it answers
       const last = isProblem(error) && error.noAnswer ? (before ?? keptPerson()) : null
       if (last) {
-        pagePerson.drawnFor(last.id)
+        if (pagePerson.now().id === null) pagePerson.drawnFor(last.id)
         return last
       }
       throw error
@@ -77,6 +79,14 @@ export function useMe(): Me {
   const me = useContext(MeContext)
   if (!me) throw new Error('useMe needs somebody to be signed in')
   return me
+}
+
+/** The person of this page is signed in again: it goes on where it was, and everything on it is read anew. */
+export function comeBack(client: QueryClient, me: Me): void {
+  client.setQueryData(meKey, me)
+  keepPerson(me)
+  pagePerson.drawnFor(me.id)
+  void client.invalidateQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
 }
 
 /** Somebody else is there now, or nobody: who that is, and nothing that was read under the one before. */

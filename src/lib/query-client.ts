@@ -1,10 +1,11 @@
 import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query'
+import { pagePerson } from './page-person.ts'
 import { isProblem } from './problem-error.ts'
 
 /** The key under which the client keeps who is signed in. */
 export const meKey = ['me'] as const
 
-/** Server state lives here and nowhere else. A session that has ended anywhere sends the whole client to sign-in. */
+/** Server state lives here and nowhere else. */
 export function createQueryClient(): QueryClient {
   const client: QueryClient = new QueryClient({
     queryCache: new QueryCache({ onError: noticeSession }),
@@ -22,7 +23,8 @@ export function createQueryClient(): QueryClient {
     },
   })
   function noticeSession(error: unknown): void {
-    if (isProblem(error, 'not-signed-in')) client.setQueryData(meKey, null)
+    // a page with somebody's text on it asks for their password in place: src/app/sign-in-again.tsx
+    if (isProblem(error, 'not-signed-in') && pagePerson.now().id === null) client.setQueryData(meKey, null)
     // roles may have been withdrawn since this page was drawn
     if (isProblem(error, 'password-change-required', 'may-not'))
       void client.invalidateQueries({ queryKey: meKey })

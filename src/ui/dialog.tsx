@@ -13,6 +13,7 @@ import { useModal } from './use-modal.ts'
  * @param acts     buttons, the act first
  * @param typed    something was typed that going back would lose
  * @param alert    it interrupts, such as an entry that was not sent
+ * @param covers   nothing of the page below is shown
  */
 export function Dialog({
   question,
@@ -22,6 +23,7 @@ export function Dialog({
   typed = false,
   alert = false,
   wide = false,
+  covers = false,
 }: {
   question: string
   children?: ReactNode
@@ -30,6 +32,7 @@ export function Dialog({
   typed?: boolean
   alert?: boolean
   wide?: boolean
+  covers?: boolean
 }) {
   const id = useId()
   const [asking, setAsking] = useState(false)
@@ -41,7 +44,7 @@ export function Dialog({
   return (
     <dialog
       ref={dialog}
-      className={classNames('dialog', wide && 'dialog-wide')}
+      className={classNames('dialog', wide && 'dialog-wide', covers && 'dialog-covers')}
       role={alert ? 'alertdialog' : undefined}
       aria-labelledby={id}
     >

@@ -155,12 +155,43 @@ describe('somebody who is signed in', () => {
     expect(router.state.location.pathname).toBe('/new-password')
   })
 
-  it('is led to sign-in when any call finds the session ended, and comes back to where they were', async () => {
+  /** Somebody on a sheet whose session ended elsewhere; the next call finds it out. */
+  async function endedSession() {
     signedIn = ilse
-    const { place, router, settled } = await open('/settings/own')
-    await settled('h1')
+    const opened = await open('/settings/own')
+    await opened.settled('h1')
     signedIn = null
-    await click(place.querySelector('[role="radio"][aria-checked="false"]')!)
+    await click(opened.place.querySelector('[role="radio"][aria-checked="false"]')!)
+    await opened.settled('dialog[open] input[type="password"]')
+    return opened
+  }
+
+  it('is asked for the password in place when any call finds the session ended, and goes on on the same sheet', async () => {
+    const { place, router } = await endedSession()
+    const sheet = one(place, 'h1')
+    expect(router.state.location.pathname).toBe('/settings/own')
+    expect(one(place, 'dialog').textContent).toContain('Dr Ilse Marrow, you are signed out')
+    await click(named(place, 'Sign in and go on'))
+    expect(place.textContent).toContain('Type your password.')
+    refusal = problem(401, 'sign-in-failed', 'E-mail or password is not right', 'Check both.')
+    await type(one<HTMLInputElement>(place, 'dialog input[type="password"]'), 'wrong')
+    await click(named(place, 'Sign in and go on'))
+    expect(one(place, 'dialog').textContent).toContain('E-mail or password is not right')
+    refusal = null
+    await type(one<HTMLInputElement>(place, 'dialog input[type="password"]'), 'chart-paper-7')
+    await click(named(place, 'Sign in and go on'))
+    expect(place.querySelector('dialog')).toBeNull()
+    expect(one(place, 'h1')).toBe(sheet)
+    const [, sent] = vi
+      .mocked(fetch)
+      .mock.calls.filter(([address]) => address === '/api/sign-in')
+      .at(-1)!
+    expect(sent?.body).toBe('{"email":"vet@harrow-point.example","password":"chart-paper-7"}')
+  })
+
+  it('may leave such a sheet and sign in anew, and comes back to where they were', async () => {
+    const { place, router, settled } = await endedSession()
+    await click(named(place, 'Leave this page and sign in anew'))
     await settled('form.sign-in')
     expect(router.state.location.search).toBe('?then=%2Fsettings%2Fown')
     await fillIn(place, 'chart-paper-7')
