@@ -2,9 +2,9 @@ import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aGroup, anAnimal, aPlace, aStingray } from '../builders/a-collection.ts'
 import type { TestPlace } from '../builders/a-collection.ts'
-import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -30,23 +30,10 @@ afterAll(async () => {
 
 const ago = (days: number) => new Date(app.clock.now().getTime() - days * dayMs).toISOString()
 
-async function signedIn(role: string, size: { width: number; height: number }): Promise<Page> {
-  const { page } = await newSession(browser, {
-    ...size,
-    expectedErrors: [/401 \(Unauthorized\)/, /409 \(Conflict\)/, /404 \(Not Found\)/],
-  })
-  await page.goto(`${app.url}/animals`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${role}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.getByRole('heading', { name: 'Animals and groups' }).waitFor()
-  return page
-}
+const signedIn = (role: string, size: typeof deskSize): Promise<Page> =>
+  openSignedIn(browser, app, role, '/animals', { ...size, expectedErrors: refusals(404, 409) })
 
-describe.each([
-  { width: 1440, height: 900 },
-  { width: 390, height: 844 },
-])('animals at $width px', (size) => {
+describe.each([deskSize, phoneSize])('animals at $width px', (size) => {
   const name = `Sail ${String(size.width)}`
 
   it('are found, weighed with a slip that is asked back, and moved', async () => {

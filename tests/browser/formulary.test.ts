@@ -1,9 +1,8 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aProduct } from '../builders/an-order.ts'
-import { password } from '../support/api.ts'
-import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -29,46 +28,18 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [
-  /401 \(Unauthorized\)/,
-  /403 \(Forbidden\)/,
-  /409 \(Conflict\)/,
-  /422 \(Unprocessable/,
-]
-const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, expectedErrors }
-
-const picture = async (page: Page, name: string) => {
-  const folder = process.env['PRATIQUE_PICTURES']
-  if (folder) await page.screenshot({ path: `${folder}/${name}.png`, fullPage: true })
-}
-
-async function signedIn(email: string, size: typeof desk, at: string): Promise<Page> {
-  const { page } = await newSession(browser, size)
-  await page.goto(`${app.url}${at}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${email}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL((url) => url.pathname === at.replace(/\?.*/, ''))
-  return page
-}
-
-/** Accessible, and nothing sticks out at the side. */
-async function expectSound(page: Page, where: string): Promise<void> {
-  await expectAccessible(page, where)
-  const { scrolls, width } = await page.evaluate(() => ({
-    scrolls: document.documentElement.scrollWidth,
-    width: window.innerWidth,
-  }))
-  expect(scrolls, `${where} at ${String(width)} px`).toBeLessThanOrEqual(width)
-}
+const expectedErrors = refusals(403, 409, 422)
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, expectedErrors }
+const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
+  openSignedIn(browser, app, who, at, size)
 
 describe.each([desk, phone])('the formulary at $width px', (size) => {
   it('shows each range with its source and mark, and who confirmed it; a lot can be noted', async () => {
     const page = await signedIn('veterinarian', size, '/pharmacy/formulary')
     await page.getByRole('heading', { name: 'Formulary' }).waitFor()
     await expectSound(page, 'the formulary')
-    await picture(page, `formulary-${String(size.width)}`)
+    await picture(page, 'formulary')
     if (size === phone) await page.getByText('Filters', { exact: true }).click()
     await page.getByLabel('Drug', { exact: true }).selectOption('formalin')
     await page.waitForURL(/drug=formalin/)
@@ -84,7 +55,7 @@ describe.each([desk, phone])('the formulary at $width px', (size) => {
     await page.getByText(/Test veterinarian, \d/).waitFor()
     expect(await page.getByText('Confirmed here').isVisible()).toBe(true)
     await expectSound(page, 'a dose line')
-    await picture(page, `dose-line-${String(size.width)}`)
+    await picture(page, 'dose-line')
 
     await page.goto(`${app.url}/pharmacy/formulary?q=copper`)
     await page

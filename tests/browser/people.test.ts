@@ -1,9 +1,8 @@
-import path from 'node:path'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -22,33 +21,27 @@ afterAll(async () => {
 })
 
 /** Pictures for whoever looks, in the ignored folder; only when asked for. */
-const picture = async (page: Page, name: string) => {
-  const folder = process.env['PRATIQUE_PICTURES']
-  if (folder) await page.screenshot({ path: path.join(folder, `${name}.png`), fullPage: true })
+/** A link out of a form with something typed in it asks first, and the way back keeps what was typed. */
+async function staysUnlessLeft(page: Page, link: string): Promise<void> {
+  const before = page.url()
+  await page.getByRole('link', { name: link, exact: true }).click()
+  await page.getByRole('alertdialog', { name: 'Leave without keeping it?' }).waitFor()
+  await page.getByRole('button', { name: 'Go on writing' }).click()
+  expect(page.url()).toBe(before)
 }
 
-async function signIn(page: Page, email: string, to: string): Promise<void> {
-  await page.goto(`${app.url}${to}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(email)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-}
+const expectedErrors = refusals(409, 422)
 
-// The first question of a page is who is signed in; refusals of forms are what this journey is about
-const expectedRefusals = [/401 \(Unauthorized\)/, /409 \(Conflict\)/, /422 \(Unprocessable/]
-const sizes = [
-  { width: 1440, height: 900, expectedErrors: expectedRefusals },
-  { width: 390, height: 844, expectedErrors: expectedRefusals },
-]
-
-describe.each(sizes)('the administrator at $width px', (size) => {
+describe.each([
+  { ...deskSize, expectedErrors },
+  { ...phoneSize, expectedErrors },
+])('the administrator at $width px', (size) => {
   it('enters a person, is told what is wrong, enters a licence and voids it', async () => {
-    const { page } = await newSession(browser, size)
     const email = `jo${String(size.width)}@harrow-point.example`
-    await signIn(page, 'administrator@harrow-point.example', '/settings/people')
+    const page = await openSignedIn(browser, app, 'administrator', '/settings/people', size)
     await page.getByRole('link', { name: 'Test keeper' }).waitFor()
     await expectAccessible(page, 'people')
-    await picture(page, `people-${String(size.width)}`)
+    await picture(page, 'people')
     expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(size.width)
 
     await page.getByRole('link', { name: 'Enter a person' }).click()
@@ -60,10 +53,11 @@ describe.each(sizes)('the administrator at $width px', (size) => {
     await page.getByRole('button', { name: 'Enter this person' }).click()
     await page.getByText('Somebody already signs in with this e-mail').waitFor()
     await page.getByRole('textbox', { name: 'E-mail' }).fill(email)
+    await staysUnlessLeft(page, 'Go back')
     await expectAccessible(page, 'new person')
     await page.getByRole('button', { name: 'Enter this person' }).click()
     await page.getByText(/^[a-z2-9]{4}-[a-z2-9]{4}-[a-z2-9]{4}$/).waitFor()
-    await picture(page, `new-person-${String(size.width)}`)
+    await picture(page, 'new-person')
     await page.getByRole('link', { name: 'Dr Jo Calder' }).click()
 
     await page.getByRole('button', { name: 'Enter a licence' }).click()
@@ -74,9 +68,10 @@ describe.each(sizes)('the administrator at $width px', (size) => {
     await page.getByRole('button', { name: 'Enter a licence' }).click()
     await page.getByText('The last day has to be on or after the first day.').waitFor()
     await page.getByLabel('Last day').fill('2027-01-01')
+    await staysUnlessLeft(page, 'People and licences')
     await page.getByRole('button', { name: 'Enter a licence' }).click()
     await page.getByText('Norrell Sound, VL-9: valid').waitFor()
-    await picture(page, `person-${String(size.width)}`)
+    await picture(page, 'person')
     await expectAccessible(page, 'person')
     await page.getByRole('button', { name: 'Void' }).click()
     await page.getByRole('textbox', { name: 'Reason' }).fill('entered for the wrong person')
@@ -86,8 +81,7 @@ describe.each(sizes)('the administrator at $width px', (size) => {
   })
 
   it('proposes and confirms a setting, and finds it in the audit trail', async () => {
-    const { page } = await newSession(browser, size)
-    await signIn(page, 'administrator@harrow-point.example', '/settings/facility')
+    const page = await openSignedIn(browser, app, 'administrator', '/settings/facility', size)
     const paper = page.getByRole('textbox', { name: 'New value of: Paper' })
     await paper.fill('A5')
     await paper.press('Enter')
@@ -97,21 +91,19 @@ describe.each(sizes)('the administrator at $width px', (size) => {
     await page.getByRole('button', { name: 'Confirm' }).click()
     await page.getByText('Confirmed and in force').waitFor()
     await expectAccessible(page, 'facility settings')
-    await picture(page, `facility-${String(size.width)}`)
+    await picture(page, 'facility')
 
     await page.goto(`${app.url}/settings/audit?q=setting.confirm`)
     await page.getByRole('cell', { name: 'setting Paper' }).first().waitFor()
     await expectAccessible(page, 'audit trail')
-    await picture(page, `audit-${String(size.width)}`)
+    await picture(page, 'audit')
   })
 })
 
 it('tells somebody who may not manage people why the sheet is shut', async () => {
-  const { page } = await newSession(browser, {
-    width: 1440,
-    height: 900,
-    expectedErrors: [...expectedRefusals, /403 \(Forbidden\)/],
+  const page = await openSignedIn(browser, app, 'keeper', '/settings/people', {
+    ...deskSize,
+    expectedErrors: refusals(403),
   })
-  await signIn(page, 'keeper@harrow-point.example', '/settings/people')
   await page.getByText(/This is for an administrator/).waitFor()
 })

@@ -1,14 +1,15 @@
 import { stat } from 'node:fs/promises'
-import path from 'node:path'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aCase, aFish } from '../builders/a-case.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
 import { aGroup } from '../builders/a-collection.ts'
 import { anEnclosure } from '../builders/a-water.ts'
+import { anObservation } from '../builders/an-observation.ts'
 import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -30,6 +31,17 @@ beforeAll(async () => {
     .post(`${held.url}/holds`)
     .send({ id: app.nextId(), happenedAt: ago(1), origin: 'online', device: 'test' })
     .expect(201)
+  // more than one page of the log holds
+  for (let minute = 0; minute < 61; minute++)
+    await agent
+      .post('/api/observations')
+      .send(
+        anObservation(app, held.enclosure.code, {
+          happenedAt: ago(0.5 + minute / 1440),
+          words: `look ${String(minute)}`,
+        }),
+      )
+      .expect(201)
   await app.person({
     email: 'unlicensed@harrow-point.example',
     printedName: 'Dr Without',
@@ -44,41 +56,11 @@ afterAll(async () => {
 })
 
 const ago = (days: number) => new Date(app.clock.now().getTime() - days * dayMs).toISOString()
-const desk = { width: 1440, height: 900 }
-const phone = { width: 390, height: 844, keepsSheets: true }
-
-/** Pictures for whoever looks, in the ignored folder; only when asked for. */
-const picture = async (page: Page, name: string) => {
-  const folder = process.env['PRATIQUE_PICTURES']
-  if (folder) await page.screenshot({ path: path.join(folder, `${name}.png`), fullPage: true })
-}
-
-async function signedIn(role: string, size: typeof desk, to: string): Promise<Page> {
-  const { page } = await newSession(browser, {
-    ...size,
-    expectedErrors: [
-      /ERR_INTERNET_DISCONNECTED/,
-      /ERR_FAILED/,
-      /401 \(Unauthorized\)/,
-      /403 \(Forbidden\)/,
-      /409 \(Conflict\)/,
-      /422 \(Unprocessable/,
-    ],
-  })
-  await page.goto(`${app.url}${to}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${role}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL((url) => url.pathname === to)
-  return page
-}
-
-/** Accessible, and nothing sticks out at the side. */
-async function expectSound(page: Page, where: string): Promise<void> {
-  await expectAccessible(page, where)
-  const [width, wanted] = await page.evaluate(() => [document.documentElement.scrollWidth, window.innerWidth])
-  expect(width, `${where}: width`).toBeLessThanOrEqual(wanted ?? 0)
-}
+const expectedErrors = [...refusals(403, 409, 422), /ERR_INTERNET_DISCONNECTED/, /ERR_FAILED/]
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, expectedErrors, keepsSheets: true }
+const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
+  openSignedIn(browser, app, who, at, size)
 
 describe.each([
   { size: desk, at: 0 },
@@ -88,12 +70,19 @@ describe.each([
     const own = shown[at] as BuiltCase
     const page = await signedIn('veterinarian', size, '/quarantine')
     await page.getByRole('img', { name: /4.quarantine passages on one day ruler/ }).waitFor()
-    await picture(page, `board-${String(size.width)}`)
+    await picture(page, 'board')
     await expectSound(page, 'board')
+    if (size === desk) {
+      await page.getByText(/^The newest 60 of \d+.observations\.$/).waitFor()
+      expect(await page.getByText('look 60.', { exact: true }).count()).toBe(0)
+      await page.getByRole('button', { name: 'Older observations' }).click()
+      await page.getByText('look 60.', { exact: true }).waitFor()
+      expect(await page.getByRole('button', { name: 'Older observations' }).count()).toBe(0)
+    }
     await page.getByRole('radio', { name: 'Table' }).click()
     const table = page.getByRole('table', { name: 'Quarantine' })
     await table.getByText('Held', { exact: true }).waitFor()
-    await picture(page, `board-table-${String(size.width)}`)
+    await picture(page, 'board-table')
     await expectSound(page, 'board as a table')
     await page.getByRole('radio', { name: /^Held/ }).click()
     await page.waitForURL(/view=held/)
@@ -101,7 +90,7 @@ describe.each([
     await table.getByRole('link', { name: own.number, exact: true }).click()
 
     await page.getByRole('heading', { name: 'Before clearance' }).waitFor()
-    await picture(page, `case-${String(size.width)}`)
+    await picture(page, 'case')
     await expectSound(page, 'case')
     await page.getByRole('button', { name: 'Report an event' }).click()
     const dialog = page.getByRole('dialog')
@@ -109,7 +98,7 @@ describe.each([
     await dialog.getByRole('radio', { name: 'Wet material' }).click()
     await dialog.getByRole('radio', { name: 'Into this water' }).click()
     await expectAccessible(page, 'form of an event')
-    await picture(page, `report-${String(size.width)}`)
+    await picture(page, 'report')
     await dialog.getByRole('button', { name: 'Record the event' }).click()
     await dialog.waitFor({ state: 'detached' })
     await page
@@ -121,7 +110,7 @@ describe.each([
       dayNumber: 0,
       legs: [{ endReason: { code: 'restarted-wet-material' } }, {}],
     })
-    await picture(page, `case-restarted-${String(size.width)}`)
+    await picture(page, 'case-restarted')
   })
 })
 
@@ -134,13 +123,13 @@ describe('a keeper with wet hands, at 390 px', () => {
     const page = await signedIn('keeper', phone, '/rounds')
     await page.getByRole('heading', { name: 'Quarantine: Wing' }).waitFor()
     await expectSound(page, 'rounds')
-    await picture(page, 'rounds-390')
+    await picture(page, 'rounds')
 
     await page.getByRole('link', { name: `Observe ${code}`, exact: true }).click()
     await page.getByText('Say one thing, then save.').waitFor()
     expect(await page.getByRole('radio', { checked: true }).count(), 'said beforehand').toBe(0)
     await expectSound(page, 'observation')
-    await picture(page, 'observe-390')
+    await picture(page, 'observe')
     await page.getByRole('button', { name: /^All well/ }).click()
     await page.getByRole('button', { name: /^Save at/ }).click()
     await page.waitForURL(/\/rounds$/)
@@ -166,7 +155,7 @@ describe('a keeper with wet hands, at 390 px', () => {
     await page.getByRole('radio', { name: 'Some', exact: true }).click()
     await page.getByRole('radio', { name: 'Fast', exact: true }).click()
     await page.getByRole('checkbox', { name: /^For the veterinarian/ }).check()
-    await picture(page, 'observe-offline-390')
+    await picture(page, 'observe-offline')
     const savedAt = await page.evaluate(() => Date.now())
     await page.getByRole('button', { name: /^Save at/ }).click()
     await page.waitForURL(/\/rounds$/)
@@ -176,13 +165,13 @@ describe('a keeper with wet hands, at 390 px', () => {
     await page.getByText(/1.entry kept on this device, not yet sent/).waitFor()
     await page.getByText(/This list is from/).waitFor()
     await expectSound(page, 'rounds without a signal')
-    await picture(page, 'rounds-offline-390')
+    await picture(page, 'rounds-offline')
     await page.goto(`${app.url}/enclosures/${code}/observe`)
     await page.getByRole('button', { name: /^All well/ }).waitFor()
     await page.goto(`${app.url}/unsent`)
     await page.getByText(/Some ate\. Breathing fast/).waitFor()
     await expectSound(page, 'entries on this device')
-    await picture(page, 'unsent-390')
+    await picture(page, 'unsent')
     expect((await seen()).total).toBe(1)
 
     await page.getByRole('button', { name: /^Test keeper/ }).click()
@@ -229,7 +218,7 @@ describe('a keeper with wet hands, at 390 px', () => {
     await page.getByText('This rings nobody. Telephone now:').waitFor()
     expect(await page.getByRole('link', { name: /Dr Ines Marlow/ }).getAttribute('href')).toBe('tel:5550141')
     await expectSound(page, 'urgent call that was not sent')
-    await picture(page, 'urgent-390')
+    await picture(page, 'urgent')
     await page.getByRole('button', { name: 'I have telephoned' }).click()
     await page.getByRole('dialog').getByRole('combobox', { name: 'Whom' }).selectOption('Duty desk')
     await page.getByRole('dialog').getByRole('button', { name: 'Record it' }).click()
@@ -250,7 +239,7 @@ describe('a keeper with wet hands, at 390 px', () => {
     await desktop.getByText(/^Seen by Test veterinarian at/).waitFor()
     await page.getByRole('heading', { name: 'Seen', exact: true }).waitFor()
     await page.getByText(/^Seen by Test veterinarian at/).waitFor()
-    await picture(page, 'urgent-seen-390')
+    await picture(page, 'urgent-seen')
     expect(
       (await (await app.as('keeper')).agent.get('/api/notices?state=all').expect(200)).body.rows,
     ).toHaveLength(1)
@@ -271,11 +260,11 @@ describe.each([desk, phone])('the beginning and the end of a case at $width px',
     await page.getByRole('button', { name: `Take ${school.accession} out of the batch` }).waitFor()
     await page.getByRole('radio', { name: 'Yes, the batch is complete' }).click()
     await expectSound(page, 'opening a case')
-    await picture(page, `open-case-${String(size.width)}`)
+    await picture(page, 'open-case')
     await page.getByRole('button', { name: 'Open the case' }).click()
     await page.waitForURL(/\/quarantine\/Q-\d+$/)
     await page.getByRole('heading', { name: 'Before clearance' }).waitFor()
-    await picture(page, `opened-${String(size.width)}`)
+    await picture(page, 'opened')
     await page.getByText(/^Day 3 of \d+$/).waitFor({ timeout: 8000 })
     const number = new URL(page.url()).pathname.split('/').at(-1) ?? ''
 
@@ -291,18 +280,22 @@ describe.each([desk, phone])('the beginning and the end of a case at $width px',
     await vet
       .getByRole('textbox', { name: 'Why it is cleared all the same' })
       .fill('kept apart for a year before')
+    // somebody who presses a way out by mistake keeps the reason
+    await vet.getByRole('link', { name: number, exact: true }).click()
+    await vet.getByRole('alertdialog', { name: 'Leave without keeping it?' }).waitFor()
+    await vet.getByRole('button', { name: 'Go on writing' }).click()
     await vet.getByRole('textbox', { name: 'Your password' }).fill('not the password')
     await vet.getByRole('button', { name: /^Clear against/ }).click()
     await vet.locator('.signature .wrong').waitFor()
     await vet.getByRole('textbox', { name: 'Your password' }).fill(password)
     await expectSound(vet, 'clearance form')
-    await picture(vet, `clearance-${String(size.width)}`)
+    await picture(vet, 'clearance')
     await vet.getByRole('button', { name: /^Clear against/ }).click()
     await vet.waitForURL(/\/quarantine\/Q-\d+$/)
     await vet.getByRole('heading', { name: 'Clearance', exact: true }).waitFor()
     await vet.getByText(/because: kept apart for a year before/).waitFor()
     await expectSound(vet, 'cleared case')
-    await picture(vet, `cleared-${String(size.width)}`)
+    await picture(vet, 'cleared')
     const [download] = await Promise.all([
       vet.waitForEvent('download'),
       vet.getByRole('link', { name: 'Clearance certificate (PDF)' }).click(),

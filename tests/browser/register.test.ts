@@ -7,9 +7,9 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aPlace, aStingray } from '../builders/a-collection.ts'
 import { anAcquisition, aParty, aPermit, newLine, pdfBytes } from '../builders/a-register.ts'
 import { textOf } from '../pdf/support/poppler.ts'
-import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { choose, deskSize, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -21,8 +21,9 @@ let taxon: string
 const folder = mkdtempSync(path.join(tmpdir(), 'pratique-register-'))
 const agreement = path.join(folder, 'Loan agreement LA-26-04.pdf')
 
-const desk = { width: 1440, height: 900, expectedErrors: [/401 \(Unauthorized\)/, /409 \(Conflict\)/] }
-const phone = { ...desk, width: 390, height: 844 }
+const expectedErrors = refusals(409)
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, expectedErrors }
 
 beforeAll(async () => {
   app = await startServedApp()
@@ -56,17 +57,6 @@ afterAll(async () => {
   await app.stop()
 })
 
-async function signIn(page: Page, role: string, at: string): Promise<void> {
-  await page.goto(`${app.url}${at}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${role}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-}
-/** Types into a combobox and takes the first row that is offered. */
-async function choose(page: Page, name: string | RegExp, text: string, row: RegExp): Promise<void> {
-  await page.getByRole('combobox', { name }).fill(text)
-  await page.getByRole('option', { name: row }).first().click()
-}
 const noSideways = async (page: Page, width: number) =>
   expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(width)
 
@@ -80,8 +70,7 @@ async function exportAs(page: Page, format: string): Promise<{ download: Downloa
 
 describe.each([desk, phone])('the registrar at $width px', (size) => {
   it('accessions a batch with its paper and permit, and takes the history out', async () => {
-    const { page } = await newSession(browser, size)
-    await signIn(page, 'registrar', '/register')
+    const page = await openSignedIn(browser, app, 'registrar', '/register', size)
     await page.getByRole('heading', { name: 'Register' }).waitFor()
     await expectAccessible(page, 'the list of transactions')
     await noSideways(page, size.width)
@@ -161,8 +150,7 @@ describe.each([desk, phone])('the registrar at $width px', (size) => {
   })
 
   it('explains what a permit did not cover, and finds what left the house', async () => {
-    const { page } = await newSession(browser, size)
-    await signIn(page, 'registrar', '/register/permits')
+    const page = await openSignedIn(browser, app, 'registrar', '/register/permits', size)
     await page.getByRole('heading', { name: 'Permits' }).waitFor()
     await page
       .getByText(/animals? over/)
@@ -205,8 +193,7 @@ describe.each([desk, phone])('the registrar at $width px', (size) => {
 })
 
 it('shows a keeper the register without its acts, and says who may', async () => {
-  const { page } = await newSession(browser, { ...desk, expectedErrors: [/401 \(Unauthorized\)/] })
-  await signIn(page, 'keeper', '/register')
+  const page = await openSignedIn(browser, app, 'keeper', '/register', desk)
   await page.getByRole('heading', { name: 'Register' }).waitFor()
   expect(await page.getByRole('link', { name: 'Accession animals' }).count()).toBe(0)
   expect(await page.getByText('This is for a registrar.').isVisible()).toBe(true)

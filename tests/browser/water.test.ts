@@ -1,9 +1,8 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { anEnclosure, aValve, aWaterBody } from '../builders/a-water.ts'
-import { password } from '../support/api.ts'
-import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -39,27 +38,11 @@ afterAll(async () => {
   await app.stop()
 })
 
-// the browser's own lines about the question "who is signed in?" before anybody is, and about refused forms
-const expectedErrors = [/401 \(Unauthorized\)/, /422 \(Unprocessable/]
-const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, expectedErrors }
-
-async function signedIn(email: string, size: typeof desk, path: string): Promise<Page> {
-  const { page } = await newSession(browser, size)
-  await page.goto(`${app.url}${path}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${email}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL((url) => url.pathname === path)
-  return page
-}
-
-/** Accessible, and nothing sticks out at the side. */
-async function expectSound(page: Page, where: string): Promise<void> {
-  await expectAccessible(page, where)
-  const [width, wanted] = await page.evaluate(() => [document.documentElement.scrollWidth, window.innerWidth])
-  expect(width, `${where}: width`).toBeLessThanOrEqual(wanted ?? 0)
-}
+const expectedErrors = refusals(422)
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, expectedErrors }
+const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
+  openSignedIn(browser, app, who, at, size)
 
 describe.each([
   { size: desk, code: 'QT-3', sump: 'QS-3', valve: 'V-30' },

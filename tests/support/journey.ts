@@ -1,9 +1,33 @@
 import path from 'node:path'
-import type { Page } from 'playwright-core'
+import type { Browser, Page } from 'playwright-core'
 import { expect } from 'vitest'
 import { password } from './api.ts'
 import { expectAccessible } from './axe.ts'
+import { newSession } from './chromium.ts'
+import type { SessionOptions } from './chromium.ts'
 import type { ServedApp } from './served-app.ts'
+
+export const deskSize = { width: 1440, height: 900 }
+export const phoneSize = { width: 390, height: 844 }
+
+/**
+ * The browser's own lines about answers that a journey means to get, by their status. The first question of every page
+ * is who is signed in: 401 is always among them.
+ */
+export const refusals = (...statuses: number[]): RegExp[] =>
+  [401, ...statuses].map((status) => new RegExp(`status of ${String(status)} `))
+
+/** A session of its own, signed in by the form on the way to an address. */
+export async function openSignedIn(
+  browser: Browser,
+  app: ServedApp,
+  who: string,
+  at: string,
+  options: SessionOptions,
+): Promise<Page> {
+  const { page } = await newSession(browser, options)
+  return signIn(page, app, who, at)
+}
 
 /** Opens an address, signs in on the way as a person would, and is there when it returns. */
 export async function signIn(page: Page, app: ServedApp, name: string, at: string): Promise<Page> {
