@@ -58,7 +58,7 @@ describe('a call', () => {
     await expect(api(issueOneTimePassword, { params })).rejects.toThrow('needs a key')
   })
 
-  it('says for whom it writes, and notices when somebody else is signed in by then', async () => {
+  it('says for whom it writes, and notices when somebody else, or nobody, is signed in by then', async () => {
     const fetching = answers(200, {})
     pagePerson.drawnFor('p-1')
     await api(signOut, {})
@@ -70,8 +70,13 @@ describe('a call', () => {
     vi.restoreAllMocks()
     answers(409, { code: 'different-person', title: 'Somebody else', signed_in: 'Ilse Test' })
     expect(await problem(api(signOut, {}))).toMatchObject({ code: 'different-person' })
-    expect(pagePerson.now()).toEqual({ id: 'p-1', other: 'Ilse Test' })
+    expect(pagePerson.now()).toEqual({ id: 'p-1', other: 'Ilse Test', ended: false })
+    answers(401, { code: 'not-signed-in', title: 'Sign in to go on', status: 401 })
+    expect(await problem(api(signOut, {}))).toMatchObject({ code: 'not-signed-in' })
+    expect(pagePerson.now()).toEqual({ id: 'p-1', other: null, ended: true })
     pagePerson.drawnFor(null)
+    await problem(api(signOut, {}))
+    expect(pagePerson.now()).toEqual({ id: null, other: null, ended: false })
   })
 
   it('answers nothing for 204', async () => {
