@@ -1,4 +1,5 @@
 import type { BathOrderFields } from '../../shared/contracts/order-primitives.ts'
+import type { DoseUse } from '../../shared/domain/formulary/dose-line.ts'
 import type { Composition } from '../composition.ts'
 import { saidCautions } from '../features/orders/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
@@ -16,6 +17,8 @@ type Fate = 'draft' | 'proposal' | 'signed' | 'held' | 'discontinued' | 'first-g
 interface DemoOrder {
   enclosure: string
   agent: string
+  /** The use of the dose line that it is ordered by. */
+  line: DoseUse
   lot?: string
   /** When it was written and the first dose is planned, in hours from now. */
   writtenHours: number
@@ -23,6 +26,17 @@ interface DemoOrder {
   fate: Fate
   fields: Partial<BathOrderFields>
 }
+
+const noneStated: BathOrderFields['stated'] = {
+  waterKind: null,
+  oxygenIsLogged: null,
+  hasBloom: null,
+  hasPlantsOrAlgae: null,
+  lights: null,
+  experienceWith: [],
+}
+/** The river water of the quarantine wing, whose salinity nobody reads. */
+const freshWater = { ...noneStated, waterKind: 'fresh' as const }
 
 const peroxide: Partial<BathOrderFields> = {
   problem: 'Yellow mats on the gills, columnaris suspected',
@@ -32,6 +46,7 @@ const peroxide: Partial<BathOrderFields> = {
   contactMinutes: 60,
   division: { value: '1', unit: 'mL' },
   stopIf: 'gasping at the surface, any fish on its side, oxygen below 5 mg/L',
+  stated: freshWater,
 }
 const praziquantel: Partial<BathOrderFields> = {
   problem: 'Monogeneans on skin scrape, low count',
@@ -50,6 +65,7 @@ const salt: Partial<BathOrderFields> = {
   contactMinutes: 240,
   division: { value: '10', unit: 'g' },
   stopIf: 'loss of balance',
+  stated: freshWater,
 }
 
 /** Orders in every state, in the enclosures of the quarantine wing. */
@@ -57,6 +73,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-4',
     agent: 'sodium-chloride',
+    line: 'salt-bath',
     writtenHours: -18 * 24,
     startHours: -17 * 24,
     fate: 'all-given',
@@ -65,6 +82,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-3',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -14 * 24,
     startHours: -14 * 24 + 2,
     fate: 'all-given',
@@ -73,6 +91,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-2',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -12 * 24,
     startHours: -11 * 24,
     fate: 'signed',
@@ -81,6 +100,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-1',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -8 * 24,
     startHours: -7 * 24,
     fate: 'discontinued',
@@ -89,6 +109,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-4',
     agent: 'hydrogen-peroxide',
+    line: 'external-bacteria',
     writtenHours: -50,
     startHours: -48,
     fate: 'first-given',
@@ -97,6 +118,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-1',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -20,
     startHours: 1,
     fate: 'held',
@@ -105,6 +127,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-3',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -3,
     startHours: 2,
     fate: 'signed',
@@ -113,6 +136,7 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-2',
     agent: 'praziquantel',
+    line: 'flukes-prolonged',
     writtenHours: -2,
     startHours: 4,
     fate: 'draft',
@@ -121,21 +145,13 @@ const demoOrders: readonly DemoOrder[] = [
   {
     enclosure: 'QT-4',
     agent: 'sodium-chloride',
+    line: 'salt-bath',
     writtenHours: -1,
     startHours: 24,
     fate: 'proposal',
     fields: { ...salt, problem: 'Scuffed snouts after netting; salt proposed' },
   },
 ]
-
-const noneStated: BathOrderFields['stated'] = {
-  waterKind: null,
-  oxygenIsLogged: null,
-  hasBloom: null,
-  hasPlantsOrAlgae: null,
-  lights: null,
-  experienceWith: [],
-}
 
 /** Writes, signs, holds and doses the orders of the practice scenario through the services. */
 export async function seedOrders(
@@ -165,8 +181,7 @@ export async function seedOrders(
       animalIds: inside.map((animal) => animal.animalId),
       productId: product.id,
       lotId: lot.id,
-      doseLineId:
-        lines.find((line) => line.agent === order.agent && line.basis === order.fields.basis)?.id ?? null,
+      doseLineId: lines.find((line) => line.agent === order.agent && line.use === order.line)?.id ?? null,
       problem: '',
       use: 'extralabel',
       target: null,

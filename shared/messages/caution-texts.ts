@@ -93,8 +93,16 @@ export const cautionTitles = defineMessages({
   'under-default': 'Dose is far under its range',
   'no-default-range': 'No range to compare with',
   'default-not-comparable': 'Range can’t be compared',
+  'no-line-fits': 'No dose line is for this water and contact',
   'line-not-named': 'No dose line is named',
   'beyond-every-line': 'Dose is beyond every dose line',
+  'line-water-unknown': 'Kind of water is not known, and the dose line is for one',
+  'line-of-other-water': 'Dose line is for other water',
+  'left-in-over-line': 'Left in the water, and the dose line is for a time',
+  'contact-over-line': 'Contact is longer than the dose line',
+  'contact-far-over-line': 'Contact is far longer than the dose line',
+  'doses-add-up': 'Doses add up in the water',
+  'dose-on-dose': 'An earlier dose is in the water',
   'basis-missing': 'Figure does not say of what it is',
   'dose-early': 'Dose is early',
   'dose-very-early': 'Dose is much too early',
@@ -107,6 +115,7 @@ export const cautionTitles = defineMessages({
   'agent-same-day': 'Another drug within a day',
   'start-past': 'First dose lies in the past',
   'start-far': 'First dose lies far ahead',
+  'plan-long': 'Plan is very long',
   'doses-carried': 'Doses given before count',
   'plan-counts-given': 'The plan begins after doses were given, and counts them',
   'test-missing': 'Water test is missing',
@@ -255,12 +264,27 @@ export const cautionTexts = defineMessages({
     `${p.target} is ${p.factor.toFixed(1)} times the upper end of the dose line, ${p.high}.`,
   'under-default': (p) => `${p.target} is far below the lower end of the dose line, ${p.low}.`,
   'no-default-range': () =>
-    'The formulary has no dose line in force for this drug and water, so nothing shows whether the figure is usual.',
+    'The formulary has no dose line in force for this drug, so nothing shows whether the figure is usual.',
   'default-not-comparable': () => 'The figure and the dose line are on different bases that nothing joins.',
+  'no-line-fits': () =>
+    'The order names no dose line, and none of this drug is for this water and for so long a contact. A figure for a short bath says nothing about a long one.',
   'line-not-named': (p) =>
-    `The order names no dose line. ${p.target} was held against the highest of the drug, ${p.high}.`,
+    `The order names no dose line. ${p.target} was held against the highest of the drug for this water and contact, ${p.high}.`,
   'beyond-every-line': (p) =>
     `${p.target} is more than ${p.limitFactor} times ${p.high}, the highest dose line of this drug. A figure so far off is taken for a slip: check the decimal point and the unit.`,
+  'line-water-unknown': (p) =>
+    `The dose line is for ${p.lineWater}. Nobody said what this water is, and no salinity was read.`,
+  'line-of-other-water': (p) => `The dose line is for ${p.lineWater}. This is ${p.water}.`,
+  'left-in-over-line': (p) =>
+    `The dose line is for a contact of at most ${minutes(p.limitMinutes)}. The agent is to stay in the water.`,
+  'contact-over-line': (p) =>
+    `${minutes(p.minutes)} is longer than the ${minutes(p.limitMinutes)} of the dose line.`,
+  'contact-far-over-line': (p) =>
+    `${minutes(p.minutes)} is far longer than the ${minutes(p.limitMinutes)} of the dose line.`,
+  'doses-add-up': (p) =>
+    `${p.doses} doses of ${p.target} each are to stay in the water. Unless the agent is out of it before each next one, the last makes up to ${p.total}, ${p.factor.toFixed(1)} times the upper end of the dose line, ${p.high}.`,
+  'dose-on-dose': (p) =>
+    `${counted(p.stillIn, 'dose of this order is', 'doses of this order are')} in the water, and nobody recorded the agent as out. With this one it makes up to ${p.total}, ${p.factor.toFixed(1)} times the upper end of the dose line, ${p.high}.`,
   'basis-missing': () =>
     'Product or active part, salt or base, free or total: the same figure is another dose on another basis, up to four times as much.',
   'dose-early': (p) =>
@@ -282,6 +306,8 @@ export const cautionTexts = defineMessages({
   'start-past': (p) => `The first dose is planned for ${p.startsAt}, and its window has closed.`,
   'start-far': (p) =>
     `The first dose is planned for ${p.startsAt}, more than ${days(p.limitDays)} ahead. Animals and water will not be as they are judged now.`,
+  'plan-long': (p) =>
+    `From the first dose to the last it is ${days(p.days)}, more than ${days(p.limitDays)}. Animals and water will not be as they are judged now.`,
   'doses-carried': (p) =>
     `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given under an earlier version, the last at ${p.lastAt}. They count: the next is dose ${p.given + 1}.`,
   'plan-counts-given': (p) =>

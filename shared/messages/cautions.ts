@@ -6,6 +6,7 @@ import type {
   RuleParameterKey,
 } from '../domain/cautions/caution-rule.ts'
 import type { ReadingName } from '../domain/cautions/reading-name.ts'
+import type { WaterKind } from '../domain/formulary/dose-line.ts'
 import { defineMessages } from './define-messages.ts'
 
 export const cautionLevelWords = defineMessages({
@@ -42,7 +43,7 @@ export const cautionRuleWords = defineMessages({
   R22: 'Hydrogen peroxide: species, eggs and temperature',
   R23: 'Chloramine-T: acid and soft water',
   R24: 'Potassium permanganate: water, total of a day and repeats',
-  R26: 'The figure lies within the range of its dose line, or of the highest line where the order names none',
+  R26: 'The figure lies within the range of its dose line, or of the highest line for this water and contact where the order names none',
   R27: 'The figure says of what it is',
   R28: 'The dose lies within its window and the planned number',
   R29: 'Other drugs in this water, and the same drug from another order',
@@ -53,7 +54,9 @@ export const cautionRuleWords = defineMessages({
   R41: 'The animals can bear a treatment',
   R42: 'First use of this drug in a taxon here',
   R47: 'The figure is not beyond every dose line of the drug',
-  R48: 'The plan lies in the days to come, and counts what was given before',
+  R48: 'The plan lies in the days to come, is no longer than one looks ahead, and counts what was given before',
+  R49: 'Water and contact time are those of the dose line',
+  R50: 'Doses that stay in the water do not add up beyond the dose line',
 } satisfies Record<CautionRuleId, string>)
 
 export const readingWords = defineMessages({
@@ -65,6 +68,14 @@ export const readingWords = defineMessages({
   'free-copper': 'free copper',
   'total-copper': 'total copper',
 } satisfies Record<ReadingName, string>)
+
+/** What kind of water, of a dose line or as it is. */
+export const cautionWaterWords = defineMessages({
+  fresh: 'fresh water',
+  brackish: 'brackish water',
+  marine: 'sea water',
+  both: 'fresh and sea water',
+} satisfies Record<WaterKind | 'brackish', string>)
 
 export const formalinRowWords = defineMessages({
   finfish: 'finfish',
@@ -125,9 +136,12 @@ export const resolveWords = defineMessages({
   'choose-dose-line': 'Choose a line of the formulary to compare with.',
   'confirm-dose-line': 'A veterinarian first confirms a dose line for it in the formulary.',
   'state-basis': 'Say of what the figure is: product, salt, base, active part, free or total.',
+  'state-water-kind': 'Say what kind of water it is, or read the salinity.',
+  'take-agent-out': 'Take the agent out of the water before the next dose, and record it as out.',
   'wait-for-window': 'Wait until the window of the dose opens.',
   'amend-order': 'A veterinarian amends the order.',
   'check-start': 'Check the date and time of the first dose.',
+  'check-plan': 'Check the number of doses and the hours between them.',
   'determine-volume': 'Determine the volume of the water as it is connected now.',
   'calculate-again-by-another': 'Another person works out the amount, without seeing the first result.',
   'let-animals-rest': 'Let the animals recover first.',
@@ -173,6 +187,7 @@ export const ruleParameterWords = defineMessages({
   totalMgPerL: 'Highest total in 24 hours',
   apartDays: 'Least time between treatments',
   stopFactor: 'Times the upper end of the range that stop',
+  contactStopFactor: 'Times the longest contact of the dose line that stop',
   lowFactor: 'Part of the lower end of the range below which a warning is given',
   veryEarlyFactor: 'Part of the interval before which a dose is stopped',
   oxygenMinutes: 'Oldest oxygen reading',
@@ -191,5 +206,6 @@ export const ruleParameterWords = defineMessages({
   unwellPercent: 'Share of unwell animals',
   sameDayHours: 'Hours within which another drug is said',
   aheadDays: 'Days ahead from which a start is asked about',
+  planDays: 'Days from first to last dose above which a plan is asked about',
   beyondFactor: 'Times the highest dose line that nobody can sign',
 } satisfies Record<RuleParameterKey, string>)

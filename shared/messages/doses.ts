@@ -56,6 +56,8 @@ export const doseWords = defineMessages({
   volumeMovedText: 'A veterinarian would have had to amend the order first.',
   wrongEnclosure: 'The enclosure read is not the one of the order.',
   wrongLot: 'The lot read is not the one of the first calculation.',
+  longBeforeOrder: (p: { signedAt: string }) =>
+    `The order was signed ${p.signedAt}, and this time lies more than a year before it. Check the year, and type the time again.`,
   signedAfter: 'The order was signed after this dose',
   signedAfterText: 'The dose was given before the order was signed. A veterinarian reviews it.',
   whileHeld: 'The order was held',

@@ -36,6 +36,8 @@ export const orderProblemWords = defineMessages({
     'This is the draft of a veterinarian. Tell them what should be different, or write a proposal of your own.',
   startYears: (p: { years: number }) =>
     `The first dose lies more than ${counted(p.years, 'year', 'years')} from today. Check the year, and type the date again.`,
+  planYears: (p: { years: number }) =>
+    `From the first dose to the last it would be more than ${counted(p.years, 'year', 'years')}. Check the number of doses and the hours between them.`,
   lineNotInForce:
     'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
   lineOfOther: (p: { line: string; product: string }) =>

@@ -13,6 +13,7 @@ import { cautionConditions } from './caution-conditions.ts'
 import { cautionTexts, cautionTitles } from './caution-texts.ts'
 import {
   cautionRuleWords,
+  cautionWaterWords,
   formalinRowWords,
   readingWords,
   resolveWords,
@@ -66,6 +67,8 @@ function sayText(name: string, value: string, zone: string): string {
   if (name.endsWith('At')) return sayInstant(value, zone)
   if (name === 'reading') return readingWords[value as keyof typeof readingWords]
   if (name === 'row') return formalinRowWords[value as keyof typeof formalinRowWords]
+  if (name === 'lineWater' || name === 'water')
+    return cautionWaterWords[value as keyof typeof cautionWaterWords]
   if (name === 'agent') return agentNames[value as keyof typeof agentNames]
   if (name === 'because') return secondCalculationWords[value as keyof typeof secondCalculationWords]
   return value

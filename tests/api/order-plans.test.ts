@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { anEnclosure, aValve } from '../builders/a-water.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
   aBathWater,
@@ -125,6 +126,144 @@ describe('the plan of an order', () => {
     expect(await revise({ startsAt: '2026-12-01T06:00:00Z', intervalHours: 13 })).toContain(
       'R28 stop dose-very-early',
     )
+  })
+
+  it('adds up the doses that stay in the water, and holds the next while too much is in it', async () => {
+    const water = await aBathWater(api, 'QT-12')
+    const fish = await aSchool(api, water.id, 12)
+    await readingsNow(api, water.waterBodyId, {
+      'dissolved-oxygen': ['6.9', 'mg/L'],
+      temperature: ['23.4', 'degC'],
+      salinity: ['33.1', 'PSS-78'],
+    })
+    const draft = await aDraft(
+      api,
+      praziFields({
+        enclosureId: water.id,
+        animalIds: [fish.id],
+        doses: 3,
+        intervalHours: 24,
+        startsAt: '2026-11-29T18:00:00Z',
+      }),
+    )
+    const shown = await shownCautions(api, draft.number)
+    expect(shown.find(({ ruleId }) => ruleId === 'R50')).toMatchObject({
+      level: 'warning',
+      code: 'doses-add-up',
+      text: expect.stringContaining('the last makes up to 6'),
+    })
+    expect((await signDraft(api, draft)).status).toBe(201)
+    const sheet = async (key: string) => {
+      const { agent } = await api.as('technician')
+      const { body } = await agent.get(`/api/orders/${draft.number}/doses/${key}`).expect(200)
+      const found = body.cautions.find(({ ruleId }: { ruleId: string }) => ruleId === 'R50')
+      return { found: found && `${found.level} ${found.code}`, why: body.why.join(' ') }
+    }
+    expect((await sheet('1')).found).toBeUndefined()
+    const first = await record(draft.number, '1', '2026-11-29T18:10:00Z')
+    expect((await sheet('2')).found).toBe('warning dose-on-dose')
+    await record(draft.number, '2', '2026-11-30T18:10:00Z')
+    const third = await sheet('3')
+    expect(third.found).toBe('stop dose-on-dose')
+    expect(third.why).toContain('2 doses of this order are in the water')
+    const tech = await api.as('technician')
+    await tech.agent
+      .post(`/api/doses/${first}/stop`)
+      .send({
+        id: api.nextId(),
+        cause: 'time-up',
+        happenedAt: '2026-11-30T12:00:00Z',
+        rescue: 'half changed',
+      })
+      .expect(201)
+    expect(await sheet('3')).toMatchObject({ found: 'warning dose-on-dose' })
+    expect((await sheet('3')).why).not.toContain('in the water')
+  })
+
+  it('knows what came through a valve that was shut since, until it is out, and what did not', async () => {
+    const dosed = await aBathWater(api, 'QT-13')
+    const fish = await aSchool(api, dosed.id, 13)
+    const beside = await anEnclosure(api, 'QT-14')
+    const valve = await aValve(api, 'V-14', [dosed.waterBodyId, beside.waterBodyId], false)
+    const turn = async (open: boolean, happenedAt: string) => {
+      const { agent } = await api.as('technician')
+      await agent
+        .post(`/api/connections/${valve}/states`)
+        .send({ id: api.nextId(), open, happenedAt })
+        .expect(201)
+    }
+    const order = (number: number, fields: object) =>
+      aDraft(api, praziFields({ enclosureId: dosed.id, animalIds: [fish.id], ...fields })).then(
+        async (draft) => {
+          expect((await signDraft(api, draft)).status, String(number)).toBe(201)
+          return draft.number
+        },
+      )
+    const first = await order(1, {})
+    const here = async () => {
+      const { agent } = await api.as('veterinarian')
+      const fields = praziFields({ enclosureId: beside.id, animalIds: [] })
+      const { cautions } = (await agent.post('/api/order-previews').send(fields).expect(200)).body
+      return cautions
+        .filter(({ ruleId }: { ruleId: string }) => ruleId === 'R29')
+        .map(({ code }: { code: string }) => code)
+    }
+    expect(await here()).toEqual([])
+    // given while the valve was shut, and never let through
+    const alone = await record(first, '1', '2026-12-01T12:00:00Z')
+    expect(await here()).toEqual([])
+    const tech = await api.as('technician')
+    const out = (doseId: string, happenedAt: string) =>
+      tech.agent
+        .post(`/api/doses/${doseId}/stop`)
+        .send({ id: api.nextId(), cause: 'time-up', happenedAt, rescue: 'carbon on' })
+        .expect(201)
+    await out(alone, '2026-12-01T13:00:00Z')
+    const second = await order(2, {})
+    const through = await record(second, '1', '2026-12-01T14:00:00Z')
+    await turn(true, '2026-12-01T15:00:00Z')
+    await turn(false, '2026-12-01T16:00:00Z')
+    expect(await here()).toEqual(['same-agent-together'])
+    await out(through, '2026-12-01T17:00:00Z')
+    expect(await here()).toEqual([])
+  })
+
+  it('refuses a plan over years, and asks about a long one', async () => {
+    const { agent } = await api.as('veterinarian')
+    const of = (doses: number, intervalHours: number) =>
+      agent.post('/api/order-previews').send(praziFields({ doses, intervalHours }))
+    expect((await of(60, 36)).body.cautions.map(({ code }: { code: string }) => code)).not.toContain(
+      'plan-long',
+    )
+    expect((await of(60, 48)).body.cautions.map(({ code }: { code: string }) => code)).toContain('plan-long')
+    const refused = await of(60, 2160)
+    expect([refused.status, refused.body.code]).toEqual([422, 'bad-input'])
+    expect(refused.body.errors[0]).toMatchObject({ pointer: '/fields/doses', code: 'plan-beyond-reason' })
+    expect(refused.body.detail).toBe(
+      'From the first dose to the last it would be more than 2 years. Check the number of doses and the hours between them.',
+    )
+  })
+
+  it('takes no dose from years before it was signed', async () => {
+    const draft = await aDraft(api, praziFields())
+    expect((await signDraft(api, draft)).status).toBe(201)
+    const { agent } = await api.as('technician')
+    const send = (happenedAt: string) =>
+      agent.post(`/api/orders/${draft.number}/doses/1/record`).send({
+        id: api.nextId(),
+        kind: 'recorded',
+        happenedAt,
+        amount: { value: '4.36', unit: 'g' },
+        lotId: prazi.lotId,
+      })
+    const refused = await send('1999-12-01T18:00:00Z')
+    expect([refused.status, refused.body.code]).toEqual([422, 'bad-input'])
+    expect(refused.body.errors[0]).toMatchObject({ pointer: '/happenedAt', code: 'before-its-order' })
+    expect(refused.body.detail).toContain('Check the year')
+    // before its order, but of this year: it happened, and it is kept and marked
+    const kept = await send('2026-11-30T18:00:00Z')
+    expect(kept.status).toBe(201)
+    expect(JSON.stringify(kept.body.recorded)).toContain('signed-after')
   })
 
   it('asks about a start in the past or far ahead, and refuses a year that cannot be meant', async () => {

@@ -64,7 +64,7 @@ describe('what may be signed: an order', () => {
       const fields = praziFields({ target: { value: '2000', unit: 'mg/L' }, doseLineId })
       const draft = await aDraft(api, fields)
       const signed = await signDraft(api, draft, {
-        overrides: ['R26', 'R47'].map((ruleId) => ({ ruleId, reason: 'meant so' })),
+        overrides: ['R26', 'R47', 'R49'].map((ruleId) => ({ ruleId, reason: 'meant so' })),
       })
       expect(signed.body).toMatchObject({
         code: 'caution-stops',
@@ -76,6 +76,45 @@ describe('what may be signed: an order', () => {
       expect(
         (await preview(praziFields({ target: { value: '100', unit: 'mg/L' }, doseLineId }))).cautions,
       ).toContainEqual(expect.objectContaining({ ruleId: 'R26', level: 'stop', overridable: true }))
+  })
+
+  it('is held against water and contact of its dose line, and of the lines that fit where it names none', async () => {
+    const { lines } = (await (await api.as('veterinarian')).agent.get('/api/formulary').expect(200)).body
+    const lineOf = (use: string) => lines.find((line: { use: string }) => line.use === use).id
+    const fired = async (given: object) =>
+      (await preview(praziFields(given))).cautions
+        .filter(({ ruleId }: { ruleId: string }) => ['R26', 'R49'].includes(ruleId))
+        .map(({ level, code }: { level: string; code: string }) => `${level} ${code}`)
+    const short = { doseLineId: lineOf('flukes-short'), target: { value: '10', unit: 'mg/L' } }
+    const timed = (contactMinutes: number) => ({ timing: 'timed', contactMinutes })
+    expect(await fired({ ...short, ...timed(2880) })).toEqual([])
+    expect(await fired({ ...short, ...timed(2881) })).toEqual(['warning contact-over-line'])
+    expect(await fired({ ...short, ...timed(5761) })).toEqual(['stop contact-far-over-line'])
+    expect(await fired(short)).toEqual(['stop left-in-over-line'])
+    // left out, the line loosens nothing: only the one for what stays in sea water counts
+    expect(await fired({ target: { value: '20', unit: 'mg/L' } })).toEqual(['stop far-over-default'])
+    expect(await fired({ target: { value: '10', unit: 'mg/L' }, ...timed(2880) })).toEqual([
+      'warning line-not-named',
+    ])
+    const pond = await aBathWater(api, 'QT-11')
+    const fish = await aSchool(api, pond.id, 11)
+    const inFresh = {
+      enclosureId: pond.id,
+      animalIds: [fish.id],
+      stated: { ...bathFields({ enclosureId: pond.id }).stated, waterKind: 'fresh' },
+    }
+    expect(await fired(inFresh)).toEqual(['stop no-line-fits'])
+    const prolonged = { ...inFresh, doseLineId: lineOf('flukes-prolonged') }
+    expect(await fired(prolonged)).toEqual(['stop line-of-other-water'])
+    const draft = await aDraft(api, praziFields(prolonged))
+    const refused = await signDraft(api, draft)
+    expect(refused.body).toMatchObject({
+      code: 'caution-stops',
+      cautions: [{ ruleId: 'R49', code: 'line-of-other-water', overridable: true }],
+    })
+    expect(refused.body.cautions[0].text).toBe('The dose line is for sea water. This is fresh water.')
+    const reason = 'the only figure there is; watched through the whole bath'
+    expect((await signDraft(api, draft, { overrides: [{ ruleId: 'R49', reason }] })).status).toBe(201)
   })
 
   it('refuses a dose line of another drug, and one that nobody confirmed', async () => {

@@ -10,7 +10,14 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FactTimes } from '../facility/index.ts'
 import * as repository from './administrations.repository.ts'
 import { createCalculations } from './calculations.service.ts'
-import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
+import {
+  lockAndRead,
+  personOf,
+  refuseBroken,
+  refuseGiver,
+  refuseLongBefore,
+  subjectOf,
+} from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { createStrikes } from './strike.service.ts'
 import { goneOf } from './dose-situation.ts'
@@ -176,6 +183,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           at: happenedAt,
           lotId: given.lotId,
         })
+        refuseLongBefore(situation, happenedAt)
         await writeDose(tx, situation, {
           id: given.id,
           kind: given.kind,

@@ -1,9 +1,11 @@
 import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { permissionWords } from '../../../shared/messages/permissions.ts'
+import { sayInstant } from '../../../shared/messages/say-date.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
+import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -31,6 +33,15 @@ export function personOf(tx: Tx): string {
 /** No dose is prepared from an order that is not what was signed. */
 export function refuseBroken({ block }: DoseSituation): void {
   if (block.state !== 'intact') throw new Problem('broken-record', { detail: doseWords.notIntact })
+}
+
+const yearMs = 366 * 24 * 3_600_000
+
+/** A dose of an order cannot be of years before it: the year was mistyped. Nearer, it happened, and is kept and marked. */
+export function refuseLongBefore({ block, judgement }: DoseSituation, happenedAt: Date): void {
+  if (Date.parse(block.signedAt) - happenedAt.getTime() <= yearMs) return
+  const signedAt = sayInstant(block.signedAt, judgement?.facts.zone ?? block.zone)
+  throw refusedInput('/happenedAt', doseWords.longBeforeOrder({ signedAt }), 'before-its-order')
 }
 
 /** A bath is given by a veterinarian or technician; what an order opens to keepers is feed and topical. */

@@ -77,7 +77,13 @@ function withSpacing(
     null,
     'the doses recorded here',
   )
-  if (intervalHours === null) return { ...facts, order: { ...facts.order, dosesGiven } }
+  const dosesStillIn = known(
+    given.filter(({ stop_at }) => stop_at === null).length,
+    null,
+    'the doses recorded here',
+  )
+  const order = { ...facts.order, dosesGiven, dosesStillIn }
+  if (intervalHours === null) return { ...facts, order }
   const spacing = {
     intervalHours,
     lastGivenAt: last,
@@ -87,7 +93,7 @@ function withSpacing(
   }
   return {
     ...facts,
-    order: { ...facts.order, dosesGiven, spacing: known(spacing, null, 'the doses recorded here') },
+    order: { ...order, spacing: known(spacing, null, 'the doses recorded here') },
   }
 }
 

@@ -1,3 +1,4 @@
+import type { WaterSourceSpell } from '../../../shared/domain/connections/list-water-sources.ts'
 import type { Db } from '../../platform/database/db.ts'
 
 export interface AgentUseRow {
@@ -53,14 +54,76 @@ export function readAgentUses(
   ) as Promise<AgentUseRow[]>
 }
 
-/** Milligrams per litre of an agent given into these enclosures in the 24 h before an instant. */
-export async function readGivenInLast24h(db: Db, enclosureIds: readonly string[], agent: string, at: Date) {
+/** An agent that came into a water with doses given where that water was then. */
+export interface CarriedAgentRow {
+  agent: string
+  number: string
+  contact_minutes: number | null
+  /** When those doses went in, in time order, and when each was over or the agent out of the water. */
+  given: { at: string; ended: string | null }[]
+}
+
+/** How long an agent that is out of the water is remembered. Project default: longer than any rule looks back. */
+const daysRemembered = 30
+
+/** The first dose, anywhere, whose agent may still be in some water or was within the last days; null when there is none. */
+export async function readFirstDoseThatMatters(db: Db, at: Date): Promise<Date | null> {
+  const [row]: { first_at: Date | null }[] = await db.query(
+    `SELECT min(d.happened_at) AS first_at FROM live_doses d
+      WHERE d.kind IN ('given', 'recorded') AND d.happened_at <= $1
+        AND NOT EXISTS (SELECT 1 FROM live_bath_stops s
+                         WHERE s.dose_id = d.id AND s.happened_at <= $1::timestamptz - $2 * interval '1 day')`,
+    [at, daysRemembered],
+  )
+  return row?.first_at ?? null
+}
+
+/** Doses that went into an enclosure during a spell in which its water came to the water asked about. */
+const dosesFromSources = `
+  live_doses d
+  JOIN order_versions v ON v.id = d.order_version_id AND d.kind IN ('given', 'recorded')
+  JOIN jsonb_to_recordset($1::jsonb) AS source("from" timestamptz, "until" timestamptz, "enclosureIds" jsonb)
+    ON d.happened_at >= source."from" AND d.happened_at < source."until"
+       AND source."enclosureIds" @> to_jsonb(v.enclosure_id::text)`
+
+/** The spells as the database reads them; the last has no end, for it holds the instant asked about. */
+const sourceRows = (sources: readonly WaterSourceSpell[]): string =>
+  JSON.stringify(
+    sources.map((spell, i) => (i === sources.length - 1 ? { ...spell, until: 'infinity' } : spell)),
+  )
+
+/** What doses brought into a water up to an instant, by the water that each went into at its own time. */
+export function readCarriedAgents(
+  db: Db,
+  sources: readonly WaterSourceSpell[],
+  at: Date,
+  exceptOrderId: string | null,
+): Promise<CarriedAgentRow[]> {
+  return db.query(
+    `SELECT v.agent, o.number, v.contact_minutes,
+            json_agg(json_build_object('at', d.happened_at, 'ended',
+                       (SELECT min(s.happened_at) FROM live_bath_stops s
+                         WHERE s.dose_id = d.id AND s.happened_at <= $2)) ORDER BY d.happened_at) AS given
+       FROM ${dosesFromSources}
+       JOIN orders o ON o.id = v.order_id
+      WHERE d.happened_at <= $2 AND ($3::uuid IS NULL OR o.id <> $3)
+      GROUP BY v.agent, o.number, v.contact_minutes`,
+    [sourceRows(sources), at, exceptOrderId],
+  )
+}
+
+/** Milligrams per litre of an agent that came into a water with the doses of the 24 h before an instant. */
+export async function readGivenInLast24h(
+  db: Db,
+  sources: readonly WaterSourceSpell[],
+  agent: string,
+  at: Date,
+) {
   const [row]: { total: number | null; unclear: string }[] = await db.query(
     `SELECT sum(d.given_mg_per_l) AS total, count(*) FILTER (WHERE d.given_mg_per_l IS NULL) AS unclear
-       FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
-      WHERE v.enclosure_id = ANY($1) AND v.agent = $2 AND d.kind IN ('given', 'recorded')
-        AND d.happened_at <= $3 AND d.happened_at > $3 - interval '24 hours'`,
-    [[...enclosureIds], agent, at],
+       FROM ${dosesFromSources}
+      WHERE v.agent = $2 AND d.happened_at <= $3 AND d.happened_at > $3 - interval '24 hours'`,
+    [sourceRows(sources), agent, at],
   )
   return { totalMgPerL: row?.total ?? 0, unclear: Number(row?.unclear ?? 0) > 0 }
 }
@@ -80,17 +143,25 @@ export async function readExperiencedTaxa(db: Db, agent: string, taxonIds: reado
   return new Set(rows.map((row) => row.taxon_id))
 }
 
-/** What the versions of an order gave so far: planned doses that went in, and when the last did. Nothing of a new order. */
+/**
+ * What the versions of an order gave so far: planned doses that went in, when the last did, and how many nobody recorded
+ * as out of the water. Nothing of a new order.
+ */
 export async function readGivenBefore(
   db: Db,
   orderId: string | null,
-): Promise<{ doses: number; lastAt: string | null }> {
-  if (orderId === null) return { doses: 0, lastAt: null }
-  const [row]: { doses: number; last_at: Date | null }[] = await db.query(
-    `SELECT count(DISTINCT d.dose_key)::int AS doses, max(d.happened_at) AS last_at
+): Promise<{ doses: number; lastAt: string | null; stillIn: number }> {
+  if (orderId === null) return { doses: 0, lastAt: null, stillIn: 0 }
+  const [row]: { doses: number; last_at: Date | null; still_in: number }[] = await db.query(
+    `SELECT count(DISTINCT d.dose_key)::int AS doses, max(d.happened_at) AS last_at,
+            (count(*) FILTER (WHERE NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)))::int AS still_in
        FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
       WHERE v.order_id = $1 AND d.kind IN ('given', 'recorded')`,
     [orderId],
   )
-  return { doses: row?.doses ?? 0, lastAt: row?.last_at?.toISOString() ?? null }
+  return {
+    doses: row?.doses ?? 0,
+    lastAt: row?.last_at?.toISOString() ?? null,
+    stillIn: row?.still_in ?? 0,
+  }
 }

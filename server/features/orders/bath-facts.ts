@@ -1,9 +1,4 @@
-import type {
-  AgentUse,
-  AnimalInWater,
-  CautionFacts,
-  OnOff,
-} from '../../../shared/domain/cautions/caution-facts.ts'
+import type { AnimalInWater, CautionFacts, OnOff } from '../../../shared/domain/cautions/caution-facts.ts'
 import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
@@ -11,13 +6,11 @@ import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
-import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
 import type { WaterFacts, WaterQuestions } from '../water/index.ts'
-import { readAgentUses, readExperiencedTaxa, readGivenInLast24h } from './agent-history.reads.ts'
-import { courseEndedAt } from './course-ended.ts'
-import type { AgentUseRow } from './agent-history.reads.ts'
+import { readAgentHistory } from './agent-history.ts'
+import { readExperiencedTaxa } from './agent-history.reads.ts'
 
 /** Salinities that part the kinds of water. Project default: no outside authority. */
 const freshBelow = 1
@@ -25,8 +18,6 @@ const marineFrom = 20
 /** mg/L of calcium carbonate in one milliequivalent per litre: half its molar mass. */
 const mgCaCO3PerMeq = 50.043
 const hoursOfTemperatures = 4
-/** A single dose has the window of a daily one. */
-const hoursOfOneDose = 24
 
 export interface BathSituation {
   base: BathFacts
@@ -86,8 +77,12 @@ export function createBathFactsReader(parts: BathFactsParts) {
       const animals = [...inside, ...(await broughtTo(water, inside, options.bring ?? [], at, db))]
       const taxonIds = [...new Set(animals.map((animal) => animal.taxonId))]
       // One after the other: inside a transaction there is one connection
-      const uses = await readAgentUses(db, enclosureIds, at, options.exceptOrderId ?? null)
-      const given = agent && (await readGivenInLast24h(db, enclosureIds, agent, at))
+      const history = await readAgentHistory(
+        parts.water,
+        { enclosureId, enclosureIds, agent, at },
+        options,
+        db,
+      )
       const experienced = agent && (await readExperiencedTaxa(db, agent, taxonIds, at))
       const temperatures = await parts.water.recentReadings(
         water.bodies.map((body) => body.id),
@@ -122,15 +117,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
           lights: unknown(),
         },
         history: {
-          agentUses: known(
-            uses.map((row) => agentUse(row, at)),
-            at.toISOString(),
-            'the orders',
-          ),
-          givenInLast24hMgPerL:
-            given && !given.unclear
-              ? known(given.totalMgPerL, at.toISOString(), 'the doses recorded here')
-              : unknown(),
+          ...history,
           reducerInUse: unknown(),
         },
       }
@@ -238,38 +225,4 @@ function volumeFact(water: WaterFacts): CautionFacts['volume']['determination'] 
     volume.measuredAt,
     'the volume determination',
   )
-}
-
-const hourMs = 3_600_000
-
-function agentUse(row: AgentUseRow, at: Date): AgentUse {
-  const until = usedUntil(row)
-  const ended = until !== null && until <= at
-  return {
-    agent: row.agent as AgentCode,
-    orderNumber: row.number,
-    state: ended ? 'ended' : row.last_given_at !== null ? 'running' : 'ordered',
-    from: (row.last_given_at ?? row.starts_at).toISOString(),
-    until: until?.toISOString() ?? null,
-  }
-}
-
-/** Until when an order puts its agent into the water; null while nobody can tell. */
-function usedUntil(row: AgentUseRow): Date | null {
-  const { contact_minutes: minutes, interval_hours: interval, last_given_at: last } = row
-  if (last === null) {
-    if (row.discontinued_at) return row.discontinued_at
-    // the window of the last dose has closed, and nothing was given: nothing is left in the water
-    const { lateHours } = doseWindow(interval ?? hoursOfOneDose)
-    const hours = (interval ?? 0) * (row.doses - 1) + lateHours + (minutes ?? 0) / 60
-    const closesAt = new Date(row.starts_at.getTime() + hours * hourMs)
-    return row.ends_at && row.ends_at > closesAt ? row.ends_at : closesAt
-  }
-  const over = courseEndedAt({ ...row, discontinued: row.discontinued_at !== null })
-  if (over) return over
-  // left in the water: until somebody records that it is out
-  if (minutes === null) return null
-  if (row.discontinued_at) return row.discontinued_at
-  const lastEnds = new Date(last.getTime() + minutes * 60_000)
-  return row.ends_at && row.ends_at > lastEnds ? row.ends_at : lastEnds
 }

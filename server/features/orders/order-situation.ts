@@ -5,7 +5,7 @@ import type { BathProduct } from '../../../shared/domain/dose/bath-product.ts'
 import type { BathOrderDraft, ChosenProduct } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
-import type { ConcentrationUnit } from '../../../shared/domain/cautions/caution-facts.ts'
+import type { ConcentrationUnit, DefaultRange } from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -73,16 +73,18 @@ export function chosenOf(
     agent: product.agent,
     product: bath,
     lot: lot && { expiresOn: lot.expiresOn, state: lot.state, foundClearAt: lot.foundClearAt },
-    line: line && { ...rangeOf(line), longestContactMinutes: line.longestContactMinutes },
-    lines: lines.map((one) => ({ ...rangeOf(one), water: one.water })),
+    line: line && rangeOf(line),
+    lines: lines.map(rangeOf),
   }
 }
 
-const rangeOf = ({ low, high, unit, basis }: DoseLine) => ({
+const rangeOf = ({ low, high, unit, basis, longestContactMinutes, water }: DoseLine): DefaultRange => ({
   low,
   high,
   unit: unit as ConcentrationUnit,
   basis,
+  longestContactMinutes,
+  water,
 })
 
 /**
@@ -111,7 +113,8 @@ export const noWaterProblem = () =>
   new Problem('not-found', { detail: 'There is no such enclosure, or it holds no water.' })
 
 const mostYearsOff = 2
-const yearMs = 366 * 24 * 3_600_000
+const hourMs = 3_600_000
+const yearMs = 366 * 24 * hourMs
 
 /** Refuses a first dose whose year cannot be meant: nothing planned or done is that far from today. */
 function refuseStart({ startsAt }: BathOrderFields, now: Date): void {
@@ -124,9 +127,20 @@ function refuseStart({ startsAt }: BathOrderFields, now: Date): void {
   })
 }
 
+/** Refuses a plan over years: nobody can know the animals and the water of its last dose. */
+function refusePlan({ doses, intervalHours }: BathOrderFields): void {
+  if (intervalHours === null || (doses - 1) * intervalHours * hourMs <= mostYearsOff * yearMs) return
+  const detail = orderProblemWords.planYears({ years: mostYearsOff })
+  throw new Problem('bad-input', {
+    detail,
+    errors: [{ pointer: '/fields/doses', detail, code: 'plan-beyond-reason' }],
+  })
+}
+
 /** Refuses what an order cannot mean, whatever else is still missing. */
 export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields, now: Date): Promise<void> {
   refuseStart(fields, now)
+  refusePlan(fields)
   await refuseDoseLine(parts, fields)
 }
 

@@ -1,4 +1,6 @@
 import type { ConnectionState, WaterMap } from '../../../shared/domain/connections/water-map.ts'
+import { listWaterSources } from '../../../shared/domain/connections/list-water-sources.ts'
+import type { WaterSourceSpell } from '../../../shared/domain/connections/list-water-sources.ts'
 import type { VolumeMethod } from '../../../shared/domain/connections/volume-determination.ts'
 import type { VolumeChoiceRefusal } from '../../../shared/domain/connections/choose-volume.ts'
 import { findVolumeMismatches } from '../../../shared/domain/connections/volume-determination.ts'
@@ -217,6 +219,22 @@ export function createWaterQuestions(parts: { dataSource: Db }) {
       const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
       const found = enclosure && (await readConnectedWater(db, enclosure, at))
       return [...new Set([enclosureId, ...(found?.water.enclosureIds ?? [])])]
+    },
+    /**
+     * Where the water of an enclosure came from since an instant: what went into these enclosures during a spell is in it
+     * by `at`, also through a valve that was shut since. None on land.
+     */
+    async waterSources(
+      enclosureId: string,
+      since: Date,
+      at: Date,
+      db: Db = parts.dataSource,
+    ): Promise<WaterSourceSpell[]> {
+      const enclosure = await placeReads.readEnclosure(db, { id: enclosureId })
+      if (!enclosure || enclosure.water_body_id === null) return []
+      const map = await readWholeWaterMap(db)
+      const found = listWaterSources(map, enclosure.water_body_id, since.toISOString(), at.toISOString())
+      return found.ok ? found.value : []
     },
     /** Readings of one parameter in these bodies after `from` up to `until`, the newest first; void ones left out. */
     async recentReadings(

@@ -1,4 +1,5 @@
 import type { AgentCode } from '../formulary/agent.ts'
+import type { WaterKind } from '../formulary/dose-line.ts'
 import type { ReadingName } from './reading-name.ts'
 import type { CautionQuantity, NamedAnimal } from './caution-param.ts'
 
@@ -109,8 +110,16 @@ export interface CautionParams {
   'under-default': { target: CautionQuantity; low: CautionQuantity }
   'no-default-range': Record<never, never>
   'default-not-comparable': Record<never, never>
+  'no-line-fits': Record<never, never>
   'line-not-named': { target: CautionQuantity; high: CautionQuantity }
   'beyond-every-line': { target: CautionQuantity; high: CautionQuantity; limitFactor: number }
+  'line-water-unknown': { lineWater: WaterKind }
+  'line-of-other-water': { lineWater: WaterKind; water: 'fresh' | 'brackish' | 'marine' }
+  'left-in-over-line': { limitMinutes: number }
+  'contact-over-line': { minutes: number; limitMinutes: number }
+  'contact-far-over-line': { minutes: number; limitMinutes: number }
+  'doses-add-up': DosesTogether
+  'dose-on-dose': DosesTogether & { stillIn: number }
   'basis-missing': Record<never, never>
   'dose-early': { hours: number; earliestHours: number }
   'dose-very-early': { hours: number; intervalHours: number }
@@ -123,6 +132,7 @@ export interface CautionParams {
   'agent-same-day': { orderNumber: string; agent: AgentCode }
   'start-past': { startsAt: string }
   'start-far': { startsAt: string; limitDays: number }
+  'plan-long': { days: number; limitDays: number }
   'doses-carried': { given: number; planned: number; lastAt: string; startsAt: string }
   'plan-counts-given': { given: number; planned: number; lastAt: string; startsAt: string }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
@@ -149,6 +159,15 @@ export interface CautionParams {
   'animals-handled-unknown': Record<never, never>
   'first-use': { taxa: readonly string[] }
   'first-use-unknown': Record<never, never>
+}
+
+/** Doses that stay in the water, and what they make together beside the upper end of a dose line. */
+interface DosesTogether {
+  doses: number
+  target: CautionQuantity
+  total: CautionQuantity
+  high: CautionQuantity
+  factor: number
 }
 
 export type CautionCode = keyof CautionParams
@@ -202,9 +221,12 @@ export type ResolveCode =
   | 'choose-dose-line'
   | 'confirm-dose-line'
   | 'state-basis'
+  | 'state-water-kind'
+  | 'take-agent-out'
   | 'wait-for-window'
   | 'amend-order'
   | 'check-start'
+  | 'check-plan'
   | 'determine-volume'
   | 'calculate-again-by-another'
   | 'let-animals-rest'

@@ -1,5 +1,6 @@
 import type { LifeStage } from '../animals/description.ts'
 import type { AgentCode } from '../formulary/agent.ts'
+import type { WaterKind } from '../formulary/dose-line.ts'
 import type { TaxonGroup } from '../taxa/taxon-group.ts'
 import type { FacilityDate, Instant, Zone } from '../time/instant.ts'
 import type { ConcentrationBasis } from '../units/basis.ts'
@@ -15,12 +16,15 @@ export interface DoseTarget {
   basis: ConcentrationBasis | null
 }
 
-/** The default range of the dose line that the order was written from. */
+/** A dose line of the formulary: its range, and what it is for. */
 export interface DefaultRange {
   low: number | null
   high: number
   unit: ConcentrationUnit
   basis: ConcentrationBasis
+  /** Longest contact that its source names; null: left in the water, or to effect. */
+  longestContactMinutes: number | null
+  water: WaterKind
 }
 
 /** One animal or group in the connected water. */
@@ -96,8 +100,9 @@ export interface CautionFacts {
     setting: Fact<'tank' | 'raceway' | 'pond'>
     startsAt: Fact<Instant>
     endsAt: Fact<Instant>
+    /** The dose line that the order names. */
     defaultRange: Fact<DefaultRange>
-    /** The ranges of every dose line in force for this agent in this kind of water, whether the order names one or not. */
+    /** Every dose line in force for this agent, whether the order names one or not. */
     agentRanges: Fact<readonly DefaultRange[]>
     amountGrams: Fact<number>
     amountMillilitres: Fact<number>
@@ -105,6 +110,8 @@ export interface CautionFacts {
     amountShareOfPlan: Fact<number>
     isTopUpInsideLimits: Fact<boolean>
     dosesGiven: Fact<number>
+    /** Doses of this order that went in and that nobody recorded as out of the water. */
+    dosesStillIn: Fact<number>
     /** Volume, lot or order version other than at the last second calculation. */
     changedSinceLastCalculation: Fact<boolean>
     copperCourse: Fact<'not-started' | 'ramp' | 'hold'>

@@ -44,6 +44,8 @@ export const cautionRuleIds = [
   'R42',
   'R47',
   'R48',
+  'R49',
+  'R50',
 ] as const
 export type CautionRuleId = (typeof cautionRuleIds)[number]
 
@@ -93,6 +95,7 @@ export const ruleParameterKeys = [
   'totalMgPerL',
   'apartDays',
   'stopFactor',
+  'contactStopFactor',
   'lowFactor',
   'veryEarlyFactor',
   'oxygenMinutes',
@@ -112,6 +115,7 @@ export const ruleParameterKeys = [
   'beyondFactor',
   'sameDayHours',
   'aheadDays',
+  'planDays',
 ] as const
 export type RuleParameterKey = (typeof ruleParameterKeys)[number]
 

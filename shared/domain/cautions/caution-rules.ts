@@ -31,6 +31,8 @@ import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
 import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
 import { plannedTime } from './rules/r48-planned-time.ts'
+import { lineConditions } from './rules/r49-line-conditions.ts'
+import { dosesAddUp } from './rules/r50-doses-add-up.ts'
 
 /** Every rule, in the order of its number, which is also the order of equal cautions on screen. */
 export const cautionRules: readonly CautionRule[] = [
@@ -66,4 +68,6 @@ export const cautionRules: readonly CautionRule[] = [
   firstUse,
   beyondEveryLine,
   plannedTime,
+  lineConditions,
+  dosesAddUp,
 ]

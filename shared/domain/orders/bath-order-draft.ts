@@ -1,6 +1,5 @@
 import type { AgentCode } from '../formulary/agent.ts'
 import type { BathProduct } from '../dose/bath-product.ts'
-import type { WaterKind } from '../formulary/dose-line.ts'
 import type { DefaultRange } from '../cautions/caution-facts.ts'
 import type { FacilityDate, Instant } from '../time/instant.ts'
 import type { ConcentrationBasis } from '../units/basis.ts'
@@ -19,8 +18,8 @@ export interface BathOrderDraft {
   setting: 'tank' | 'raceway' | 'pond' | null
   /** The step of the balance or measure. */
   division: Quantity
-  /** What earlier versions of the order gave already. */
-  given: { doses: number; lastAt: Instant | null }
+  /** What earlier versions of the order gave already, and how many of those nobody recorded as out of the water. */
+  given: { doses: number; lastAt: Instant | null; stillIn: number }
   /** What only a person knows; empty until somebody says so. */
   stated: StatedFacts
 }
@@ -41,7 +40,7 @@ export interface ChosenProduct {
   agent: AgentCode
   product: BathProduct
   lot: { expiresOn: FacilityDate; state: string; foundClearAt: Instant | null } | null
-  line: (DefaultRange & { longestContactMinutes: number | null }) | null
+  line: DefaultRange | null
   /** Every dose line in force for the agent; what an order is held against that names none of them. */
-  lines: readonly (DefaultRange & { water: WaterKind })[]
+  lines: readonly DefaultRange[]
 }

@@ -7,7 +7,7 @@ import { addHours } from '../time/instant-arithmetic.ts'
 import { parseQuantity } from '../units/parse-quantity.ts'
 import { findUnit } from '../units/find-unit.ts'
 import { unitOf } from '../units/unit-of.ts'
-import type { ConcentrationUnit, DefaultRange } from '../cautions/caution-facts.ts'
+import type { ConcentrationUnit } from '../cautions/caution-facts.ts'
 import type { BathOrderDraft, ChosenProduct } from './bath-order-draft.ts'
 
 /** The facts of the water and its animals, as the server assembled them; order and lot are still to be put in. */
@@ -61,13 +61,6 @@ function lotFacts(chosen: ChosenProduct, base: BathFacts): CautionFacts['lot'] {
   }
 }
 
-/** The lines of the agent for this kind of water; all of them where it is not known, brackish, or has none of its own. */
-function rangesIn({ lines }: ChosenProduct, kind: CautionFacts['water']['kind']): readonly DefaultRange[] {
-  const water = kind.state === 'known' ? kind.value : 'brackish'
-  const own = lines.filter((line) => water === 'brackish' || line.water === 'both' || line.water === water)
-  return (own.length > 0 ? own : lines).map(({ low, high, unit, basis }) => ({ low, high, unit, basis }))
-}
-
 /**
  * Puts an order, its product and the worked-out amount into the facts of the water, so that the caution rules can be
  * asked. What the form states overrides nothing that a ledger knows.
@@ -113,12 +106,13 @@ export function orderFacts(
       startsAt: orUnknown(draft.startsAt, 'the order'),
       endsAt: orUnknown(endsAt, 'the order'),
       defaultRange: chosen.line ? known(chosen.line, null, 'the formulary') : unknown(),
-      agentRanges: known(rangesIn(chosen, kind), null, 'the formulary'),
+      agentRanges: known(chosen.lines, null, 'the formulary'),
       amountGrams: amountFact(dose, 'g'),
       amountMillilitres: amountFact(dose, 'mL'),
       amountShareOfPlan: known(1, null, 'the order'),
       isTopUpInsideLimits: known(false, null, 'the order'),
       dosesGiven: known(draft.given.doses, null, 'the order'),
+      dosesStillIn: known(draft.given.stillIn, null, 'the order'),
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
       spacing:

@@ -47,7 +47,14 @@ const use = fc.record({
   until: fc.option(instant),
 })
 
-const range = fc.record({ low: fc.option(figure), high: figure, unit, basis })
+const range = fc.record({
+  low: fc.option(figure),
+  high: figure,
+  unit,
+  basis,
+  longestContactMinutes: fc.option(fc.constantFrom(10, 30, 60, 2880)),
+  water: fc.constantFrom('fresh' as const, 'marine' as const, 'both' as const),
+})
 
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
@@ -69,6 +76,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     amountShareOfPlan: anyFact(figure),
     isTopUpInsideLimits: anyFact(fc.boolean()),
     dosesGiven: anyFact(fc.nat(5)),
+    dosesStillIn: anyFact(fc.nat(5)),
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
     spacing: anyFact(

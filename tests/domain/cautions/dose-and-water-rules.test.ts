@@ -4,12 +4,12 @@ import { known, unknown } from '../../../shared/domain/cautions/fact.ts'
 import { agentCodes } from '../../../shared/domain/formulary/agent.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import { instantOfLocalTime } from '../../../shared/domain/time/local-time.ts'
-import { cautions, firedBy, formalin, read, someFacts } from './some-facts.ts'
+import { aLine, cautions, firedBy, formalin, read, someFacts } from './some-facts.ts'
+import type { Change } from './some-facts.ts'
 
 // Sources: as each rule names them; expected outcomes of the marked cases as computed in the treatments reference,
 // section 4.1 (C). The rest is our own reading of the same rules (P).
 
-type Change = Parameters<typeof someFacts>[2]
 const mg = (value: number, basis: DoseTarget['basis'] = 'active'): DoseTarget => ({
   value,
   unit: 'mg/L',
@@ -23,10 +23,7 @@ describe('R26, R27, R47: the figure itself', () => {
   const unnamed = {
     order: {
       defaultRange: unknown(),
-      agentRanges: known([
-        { low: 2, high: 2, unit: 'mg/L', basis: 'active' },
-        { low: 10, high: 10, unit: 'mg/L', basis: 'active' },
-      ]),
+      agentRanges: known([aLine(2), aLine(10)]),
     },
   } satisfies Change
   const range = (
@@ -34,7 +31,7 @@ describe('R26, R27, R47: the figure itself', () => {
     high: number,
     basis: 'active' | 'salt' | 'free' | 'product' = 'active',
     unit: 'mg/L' | 'uL/L' | 'ug/L' = 'mg/L',
-  ) => ({ order: { defaultRange: known({ low, high, unit, basis }) } }) satisfies Change
+  ) => ({ order: { defaultRange: known(aLine(high, { low, unit, basis })) } }) satisfies Change
   it.each<[string, CautionFacts, string[]]>([
     ['at the upper end', someFacts('praziquantel', mg(2), range(2, 2)), []],
     ['just above', someFacts('praziquantel', mg(2.1), range(2, 2)), ['warning over-default']],
@@ -112,7 +109,7 @@ describe('R26, R27, R47: the figure itself', () => {
       someFacts('praziquantel', mg(2000), {
         order: {
           ...unnamed.order,
-          defaultRange: known({ low: null, high: 2000, unit: 'mg/L', basis: 'active' }),
+          defaultRange: known(aLine(2000)),
         },
       }),
       ['stop beyond-every-line'],
@@ -122,7 +119,7 @@ describe('R26, R27, R47: the figure itself', () => {
     [
       'copper as salt against a line of free copper: 7.86 mg/L is ten times 0.2 mg/L',
       cuso(mg(7.9, 'salt'), 'marine', {
-        order: { agentRanges: known([{ low: 0.15, high: 0.2, unit: 'mg/L', basis: 'free' }]) },
+        order: { agentRanges: known([aLine(0.2, { basis: 'free' })]) },
       }),
       ['stop beyond-every-line'],
     ],

@@ -12,7 +12,7 @@ import { listCautionRules } from '../../../shared/domain/cautions/list-caution-r
 import { listExceptions } from '../../../shared/domain/cautions/list-exceptions.ts'
 import { sources } from '../../../shared/domain/sources.ts'
 import { sayCaution, sayCondition } from '../../../shared/messages/say-caution.ts'
-import { anAnimal, fired, firedBy, formalin, minutesAgo, read, someFacts } from './some-facts.ts'
+import { aLine, anAnimal, fired, firedBy, formalin, minutesAgo, read, someFacts } from './some-facts.ts'
 
 const plain = (text: string) => text.replaceAll('\u00a0', ' ')
 
@@ -53,7 +53,7 @@ describe('design and start', () => {
       'praziquantel',
       { value: 20, unit: 'mg/L', basis: 'active' },
       {
-        order: { defaultRange: known({ low: 2, high: 2, unit: 'mg/L', basis: 'active' }) },
+        order: { defaultRange: known(aLine(2, { low: 2 })) },
       },
     )
     expect(firedBy('R26', signed)).toEqual(['stop far-over-default'])
@@ -95,7 +95,7 @@ describe('the answer', () => {
     order: {
       dosesGiven: known(0),
       contactMinutes: known(60),
-      defaultRange: known({ low: null, high: 250, unit: 'uL/L', basis: 'product' }),
+      defaultRange: known(aLine(250, { unit: 'uL/L', basis: 'product' })),
     },
   })
   it('puts stops before warnings before notes, and equals in the order of the rules', () => {

@@ -1,9 +1,13 @@
 import { describe, expect, it } from 'vitest'
-import type { DoseTarget } from '../../../shared/domain/cautions/caution-facts.ts'
-import { known } from '../../../shared/domain/cautions/fact.ts'
+import type { CautionFacts, DefaultRange, DoseTarget } from '../../../shared/domain/cautions/caution-facts.ts'
+import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
-import { at, firedBy, someFacts } from './some-facts.ts'
+import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import { sayCaution } from '../../../shared/messages/say-caution.ts'
+import { aLine, at, firedBy, someFacts } from './some-facts.ts'
+import type { Change } from './some-facts.ts'
 
+const plain = (text: string) => text.replaceAll('\u00a0', ' ')
 const mg = (value: number, basis: DoseTarget['basis'] = 'active'): DoseTarget => ({
   value,
   unit: 'mg/L',
@@ -49,14 +53,14 @@ describe('R29, R48: what is in the water already, and when', () => {
   ])('R29: %s', (_, agent, other, from, until, expected) =>
     expect(withOther(agent, other, from, until)).toEqual(expected),
   )
-  const plan = (startsIn: number, givenDoses = 0, lastGiven: number | null = null) =>
+  const plan = (startsIn: number, givenDoses = 0, lastGiven: number | null = null, intervalHours = 24) =>
     firedBy(
       'R48',
       someFacts('praziquantel', mg(2), {
         order: {
           startsAt: known(hours(startsIn)),
           spacing: known({
-            intervalHours: 24,
+            intervalHours,
             lastGivenAt: lastGiven === null ? null : hours(lastGiven),
             givenDoses,
             plannedDoses: 3,
@@ -70,7 +74,145 @@ describe('R29, R48: what is in the water already, and when', () => {
     expect(plan(-6.1)).toEqual(['warning start-past'])
     expect(plan(90 * 24)).toEqual([])
     expect(plan(90 * 24 + 1)).toEqual(['warning start-far'])
+    expect(plan(0, 0, null, 1080)).toEqual([])
+    expect(plan(0, 0, null, 1081)).toEqual(['warning plan-long'])
     expect(plan(-30, 1, -29)).toEqual(['note doses-carried'])
     expect(plan(2, 1, -29)).toEqual(['warning plan-counts-given'])
+  })
+})
+
+/** A contact in minutes; null: left in the water. */
+const contact = (minutes: number | null): Partial<CautionFacts['order']> =>
+  minutes === null
+    ? { timing: known('indefinite'), contactMinutes: notApplicable() }
+    : { timing: known('timed'), contactMinutes: known(minutes) }
+
+describe('R49: water and contact of the dose line that is named', () => {
+  const named = (line: Partial<DefaultRange>, minutes: number | null, change: Change = {}) =>
+    firedBy(
+      'R49',
+      someFacts('hydrogen-peroxide', mg(75), {
+        ...change,
+        order: { defaultRange: known(aLine(75, line)), ...contact(minutes) },
+      }),
+    )
+  it.each<[string, number | null, number | null, string[]]>([
+    ['exactly as long as the line', 30, 30, []],
+    ['a little longer', 30, 31, ['warning contact-over-line']],
+    ['exactly twice as long', 30, 60, ['warning contact-over-line']],
+    ['longer than twice', 30, 61, ['stop contact-far-over-line']],
+    ['ten times as long', 30, 300, ['stop contact-far-over-line']],
+    ['a dip of ten minutes left for fourteen days', 10, 20_160, ['stop contact-far-over-line']],
+    ['left in the water', 30, null, ['stop left-in-over-line']],
+    ['a line to effect, for days', null, 20_160, []],
+    ['a line to effect, left in the water', null, null, []],
+  ])('%s', (_, longestContactMinutes, minutes, expected) =>
+    expect(named({ longestContactMinutes }, minutes)).toEqual(expected),
+  )
+  it('stops a line of other water, and asks where nobody knows what water it is', () => {
+    const inWater = (water: DefaultRange['water'], kind: CautionFacts['water']['kind']) =>
+      named({ water }, 30, { water: { kind } })
+    expect(inWater('fresh', known('marine'))).toEqual(['stop line-of-other-water'])
+    expect(inWater('marine', known('fresh'))).toEqual(['stop line-of-other-water'])
+    expect(inWater('marine', known('brackish'))).toEqual(['warning line-of-other-water'])
+    expect(inWater('fresh', unknown())).toEqual(['warning line-water-unknown'])
+    expect(inWater('fresh', known('fresh'))).toEqual([])
+    for (const kind of ['fresh', 'brackish', 'marine'] as const)
+      expect(inWater('both', known(kind))).toEqual([])
+  })
+  it('has nothing to say where no line is named: R26 compares with what fits', () => {
+    const facts = someFacts('hydrogen-peroxide', mg(75), {
+      order: { defaultRange: unknown(), ...contact(300) },
+    })
+    expect(firedBy('R49', facts)).toEqual([])
+  })
+})
+
+describe('R26, R47: no line is named, and only lines for such water and such a contact count', () => {
+  /** As the starter formulary has them: left in sea water, and two days in any. */
+  const praziquantel = [aLine(2, { water: 'marine' }), aLine(10, { longestContactMinutes: 2880 })]
+  const peroxide = [
+    aLine(100, { water: 'fresh', longestContactMinutes: 60 }),
+    aLine(75, { water: 'marine', longestContactMinutes: 30 }),
+  ]
+  const of = (
+    target: number,
+    lines: readonly DefaultRange[],
+    minutes: number | null,
+    kind: CautionFacts['water']['kind'] = known('marine'),
+  ) =>
+    someFacts('praziquantel', mg(target), {
+      order: { defaultRange: unknown(), agentRanges: known(lines), ...contact(minutes) },
+      water: { kind },
+    })
+  it.each<[string, CautionFacts, string[]]>([
+    ['2 mg/L left in', of(2, praziquantel, null), ['warning line-not-named']],
+    ['20 mg/L left in is ten times 2', of(20, praziquantel, null), ['stop far-over-default']],
+    ['10 mg/L for two days', of(10, praziquantel, 2880), ['warning line-not-named']],
+    ['10 mg/L for longer', of(10, praziquantel, 2881), ['stop far-over-default']],
+    ['left in fresh water', of(2, praziquantel, null, known('fresh')), ['stop no-line-fits']],
+    ['75 mg/L for half an hour', of(75, peroxide, 30), ['warning line-not-named']],
+    ['75 mg/L for five hours', of(75, peroxide, 300), ['stop no-line-fits']],
+    ['100 mg/L is a figure for fresh water', of(100, peroxide, 30), ['warning over-default']],
+    ['in water that nobody named', of(100, peroxide, 30, unknown()), ['warning line-not-named']],
+  ])('%s', (_, facts, expected) => expect(firedBy('R26', facts)).toEqual(expected))
+  it('R47 takes the highest line for the water, however long the contact', () => {
+    expect(firedBy('R47', of(750, peroxide, 30))).toEqual([])
+    expect(firedBy('R47', of(751, peroxide, 30))).toEqual(['stop beyond-every-line'])
+    expect(firedBy('R47', of(751, peroxide, 30, known('fresh')))).toEqual([])
+    expect(firedBy('R47', of(100, praziquantel, null))).toEqual([])
+    expect(firedBy('R47', of(101, praziquantel, null))).toEqual(['stop beyond-every-line'])
+  })
+})
+
+describe('R50: doses that stay in the water', () => {
+  const course = (
+    planned: number,
+    given: { givenDoses?: number; stillIn?: CautionFacts['order']['dosesStillIn']; target?: number } = {},
+    order: Partial<CautionFacts['order']> = {},
+  ) =>
+    someFacts('praziquantel', mg(given.target ?? 2), {
+      order: {
+        defaultRange: known(aLine(2)),
+        ...contact(null),
+        dosesStillIn: given.stillIn ?? known(0),
+        spacing: known({
+          intervalHours: 72,
+          lastGivenAt: null,
+          givenDoses: given.givenDoses ?? 0,
+          plannedDoses: planned,
+          readingDriven: false,
+        }),
+        ...order,
+      },
+    })
+  it('are added up at the signature', () => {
+    expect(firedBy('R50', course(1))).toEqual([])
+    expect(firedBy('R50', course(2))).toEqual(['warning doses-add-up'])
+    expect(firedBy('R50', course(3))).toEqual(['warning doses-add-up'])
+    // three of a third each make what one may be
+    expect(firedBy('R50', course(3, { target: 2 / 3 }))).toEqual([])
+    // baths with an end do not add up
+    expect(firedBy('R50', course(3, {}, contact(60)))).toEqual([])
+    // an amended order: one to come, and one in the water
+    expect(firedBy('R50', course(3, { givenDoses: 2, stillIn: known(0) }))).toEqual([])
+    expect(firedBy('R50', course(3, { givenDoses: 2, stillIn: known(1) }))).toEqual(['warning doses-add-up'])
+  })
+  it('hold the next one at the tank while too much is in the water', () => {
+    const atTank = (stillIn: CautionFacts['order']['dosesStillIn'], givenDoses = 2) =>
+      firedBy('R50', course(4, { givenDoses, stillIn }), 'start')
+    expect(atTank(known(0))).toEqual([])
+    expect(atTank(known(1))).toEqual(['warning dose-on-dose'])
+    expect(atTank(known(2))).toEqual(['stop dose-on-dose'])
+    // where nobody can tell, all that went in is in
+    expect(atTank(unknown())).toEqual(['stop dose-on-dose'])
+    expect(atTank(unknown(), 0)).toEqual([])
+  })
+  it('say what the last one makes', () => {
+    const { cautions } = evaluateCautions({ facts: course(3), stage: 'design' })
+    const found = cautions.find(({ code }) => code === 'doses-add-up')
+    expect(found && plain(sayCaution(found, 'Europe/Lisbon').text)).toBe(
+      '3 doses of 2 mg/L each are to stay in the water. Unless the agent is out of it before each next one, the last makes up to 6 mg/L, 3.0 times the upper end of the dose line, 2 mg/L.',
+    )
   })
 })

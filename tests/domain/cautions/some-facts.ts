@@ -1,6 +1,7 @@
 import type {
   AnimalInWater,
   CautionFacts,
+  DefaultRange,
   DoseTarget,
 } from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionSettings, CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
@@ -37,7 +38,8 @@ export function anAnimal(taxonGroup: TaxonGroup, more: Partial<AnimalInWater> = 
   }
 }
 
-type Change = {
+/** What a test changes of the facts. */
+export type Change = {
   [G in keyof CautionFacts]?: CautionFacts[G] extends string ? CautionFacts[G] : Partial<CautionFacts[G]>
 }
 
@@ -60,6 +62,8 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
         high: target.value,
         unit: target.unit,
         basis: target.basis ?? 'active',
+        longestContactMinutes: null,
+        water: 'both',
       }),
       agentRanges: known([]),
       amountGrams: known(10),
@@ -67,6 +71,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       amountShareOfPlan: known(1),
       isTopUpInsideLimits: known(false),
       dosesGiven: known(1),
+      dosesStillIn: known(0),
       changedSinceLastCalculation: known(false),
       copperCourse: known('not-started'),
       spacing: known({
@@ -165,6 +170,19 @@ export function cautions(
   settings: CautionSettings = {},
 ): Caution[] {
   return evaluateCautions({ facts, stage, settings }).cautions
+}
+
+/** A dose line of an agent in mg of it per litre, for any water and any time unless told. */
+export function aLine(high: number, change: Partial<DefaultRange> = {}): DefaultRange {
+  return {
+    low: null,
+    high,
+    unit: 'mg/L',
+    basis: 'active',
+    longestContactMinutes: null,
+    water: 'both',
+    ...change,
+  }
 }
 
 /** A formalin target in microlitres of product per litre. */

@@ -6,8 +6,35 @@ import {
 } from '../../../shared/domain/connections/connected-water.ts'
 import { connectionStateAt } from '../../../shared/domain/connections/connection-state-at.ts'
 import { listConnectedWaterSpells } from '../../../shared/domain/connections/list-connected-water-spells.ts'
+import { listWaterSources } from '../../../shared/domain/connections/list-water-sources.ts'
 import type { WaterMap } from '../../../shared/domain/connections/water-map.ts'
 import { aBody, aSmallMap, aValve, turned } from './a-water-map.ts'
+
+const names = ['a', 'b', 'c', 'd', 'e', 'f']
+const aMap = fc
+  .record({
+    pairs: fc.uniqueArray(fc.tuple(fc.constantFrom(...names), fc.constantFrom(...names)), {
+      maxLength: 9,
+      selector: ([a, b]) => `${a}-${b}`,
+    }),
+    turns: fc.array(
+      fc.record({ pick: fc.nat(8), open: fc.boolean(), hour: fc.integer({ min: 0, max: 48 }) }),
+      { maxLength: 25 },
+    ),
+  })
+  .map(({ pairs, turns }): WaterMap => {
+    const connections = pairs.filter(([a, b]) => a !== b).map(([a, b]) => aValve(a, b))
+    return {
+      bodies: names.map(aBody),
+      connections,
+      ledger: turns.flatMap(({ pick, open, hour }, i) => {
+        const valve = connections[pick % Math.max(1, connections.length)]
+        const at = new Date(Date.UTC(2026, 3, 1, hour)).toISOString()
+        return valve ? [{ ...turned(valve.connectionId, open ? 'open' : 'shut', at), entryId: `e${i}` }] : []
+      }),
+    }
+  })
+const at = '2026-04-02T06:00:00.000Z'
 
 describe('the state of a valve', () => {
   const ledger = aSmallMap().ledger
@@ -64,34 +91,6 @@ describe('connected water', () => {
       refusal: { code: 'unknown-connection-end', params: { connectionId: 'a-gone' } },
     })
   })
-
-  const names = ['a', 'b', 'c', 'd', 'e', 'f']
-  const aMap = fc
-    .record({
-      pairs: fc.uniqueArray(fc.tuple(fc.constantFrom(...names), fc.constantFrom(...names)), {
-        maxLength: 9,
-        selector: ([a, b]) => `${a}-${b}`,
-      }),
-      turns: fc.array(
-        fc.record({ pick: fc.nat(8), open: fc.boolean(), hour: fc.integer({ min: 0, max: 48 }) }),
-        { maxLength: 25 },
-      ),
-    })
-    .map(({ pairs, turns }): WaterMap => {
-      const connections = pairs.filter(([a, b]) => a !== b).map(([a, b]) => aValve(a, b))
-      return {
-        bodies: names.map(aBody),
-        connections,
-        ledger: turns.flatMap(({ pick, open, hour }, i) => {
-          const valve = connections[pick % Math.max(1, connections.length)]
-          const at = new Date(Date.UTC(2026, 3, 1, hour)).toISOString()
-          return valve
-            ? [{ ...turned(valve.connectionId, open ? 'open' : 'shut', at), entryId: `e${i}` }]
-            : []
-        }),
-      }
-    })
-  const at = '2026-04-02T06:00:00.000Z'
 
   it('puts every body into exactly one water, whatever is open', () => {
     fc.assert(
@@ -157,5 +156,63 @@ describe('spells of connected water', () => {
   it('refuse an interval that runs backwards', () => {
     const spells = listConnectedWaterSpells(aSmallMap(), 'q6', '2026-05-01T00:00:00Z', '2026-04-01T00:00:00Z')
     expect(spells).toMatchObject({ refusal: { code: 'interval-backwards', field: 'until' } })
+  })
+})
+
+describe('where the water of a body came from', () => {
+  const sources = (waterBodyId: string, from: string, until: string, map = aSmallMap()) => {
+    const found = listWaterSources(map, waterBodyId, from, until)
+    return found.ok ? found.value.map((one) => [one.from, one.until, ...one.enclosureIds]) : found.refusal
+  }
+  it('is remembered through a valve that was shut since', () => {
+    expect(sources('q6', '2026-03-15T00:00:00Z', '2026-05-01T00:00:00Z')).toEqual([
+      ['2026-03-15T00:00:00Z', '2026-04-03T09:40:00Z', 'tank-q5', 'tank-q6'],
+      ['2026-04-03T09:40:00Z', '2026-05-01T00:00:00Z', 'tank-q6'],
+    ])
+  })
+  it('does not run backwards in time: what went in after the valve was shut stays where it is', () => {
+    expect(sources('q6', '2026-04-04T00:00:00Z', '2026-05-01T00:00:00Z')).toEqual([
+      ['2026-04-04T00:00:00Z', '2026-05-01T00:00:00Z', 'tank-q6'],
+    ])
+    expect(sources('hall', '2026-01-01T00:00:00Z', '2026-05-01T00:00:00Z')).toEqual([
+      ['2026-01-01T00:00:00Z', '2026-05-01T00:00:00Z', 'tank-hall'],
+    ])
+  })
+  it('goes over water in between, and comes with what was opened later', () => {
+    const map: WaterMap = {
+      bodies: ['q5', 'q6', 'q7', 'sump'].map(aBody),
+      connections: [aValve('q7', 'sump'), aValve('q5', 'sump'), aValve('q5', 'q6')],
+      ledger: [
+        turned('q7-sump', 'open', '2026-01-01T00:00:00Z'),
+        turned('q5-sump', 'shut', '2026-01-01T00:00:00Z'),
+        turned('q5-q6', 'shut', '2026-01-01T00:00:00Z'),
+        turned('q7-sump', 'shut', '2026-02-01T00:00:00Z'),
+        turned('q5-sump', 'open', '2026-02-10T00:00:00Z'),
+        turned('q5-q6', 'open', '2026-03-01T00:00:00Z'),
+      ],
+    }
+    const from = '2026-01-15T00:00:00Z'
+    // q7 gave to the sump until February, the sump to q5, and q5 to q6 at the instant asked about
+    expect(sources('q6', from, '2026-03-01T00:00:00Z', map)).toEqual([
+      [from, '2026-02-01T00:00:00Z', 'tank-q5', 'tank-q6', 'tank-q7'],
+      ['2026-02-01T00:00:00Z', '2026-03-01T00:00:00Z', 'tank-q5', 'tank-q6'],
+    ])
+    expect(sources('q6', from, '2026-02-28T00:00:00Z', map)).toEqual([
+      [from, '2026-02-28T00:00:00Z', 'tank-q6'],
+    ])
+  })
+  it('holds at every instant at least what the body was joined to then', () => {
+    fc.assert(
+      fc.property(aMap, fc.constantFrom(...names), (map, name) => {
+        const from = '2025-01-01T00:00:00.000Z'
+        const found = listWaterSources(map, name, from, at)
+        const spells = listConnectedWaterSpells(map, name, from, at)
+        if (!found.ok || !spells.ok) return false
+        return spells.value.every(({ from: start, water }) => {
+          const source = found.value.find((one) => one.from <= start && start < one.until)
+          return water.enclosureIds.every((id) => source?.enclosureIds.includes(id))
+        })
+      }),
+    )
   })
 })

@@ -1,13 +1,13 @@
-import type { CautionFacts, DefaultRange } from '../caution-facts.ts'
 import { doseOf } from '../caution-param.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds, isBelow } from '../exceeds.ts'
+import { linesOfAgent, linesToCompare, nearestLine } from '../dose-lines.ts'
 import { valueOf } from '../fact.ts'
-import { targetOnBasisOf } from '../target-on-basis.ts'
 
 /**
  * A dose well outside the range of its own dose line is more often a slip of the decimal point than a decision. An order
- * that names no line is held against the highest of the drug, so that leaving the line out loosens nothing.
+ * that names no line is held against the highest of the drug for such water and such a contact, so that leaving the line
+ * out loosens nothing.
  */
 export const defaultRange = defineRule({
   id: 'R26',
@@ -18,7 +18,15 @@ export const defaultRange = defineRule({
     stopFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
     lowFactor: { default: 0.5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'higher' },
   },
-  uses: ['order.target', 'order.defaultRange', 'order.agentRanges', 'lot.densityGPerMl'],
+  uses: [
+    'order.target',
+    'order.defaultRange',
+    'order.agentRanges',
+    'order.timing',
+    'order.contactMinutes',
+    'water.kind',
+    'lot.densityGPerMl',
+  ],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { stopFactor, lowFactor }) {
@@ -26,7 +34,16 @@ export const defaultRange = defineRule({
     // No figure yet, or one without a basis, is R27's matter.
     if (!target || target.basis === null) return []
     const named = valueOf(facts.order.defaultRange)
-    const lines = (named ? [named] : (valueOf(facts.order.agentRanges) ?? [])).filter(({ high }) => high > 0)
+    const lines = linesToCompare(facts)
+    if (lines.length === 0 && !named && linesOfAgent(facts).length > 0)
+      return [
+        {
+          code: 'no-line-fits',
+          level: 'stop',
+          params: {},
+          resolvedBy: ['choose-dose-line', 'check-figure', 'confirm-dose-line'],
+        },
+      ]
     if (lines.length === 0)
       return [
         {
@@ -37,7 +54,7 @@ export const defaultRange = defineRule({
           unknown: ['order.agentRanges'],
         },
       ]
-    const nearest = nearestLine(facts, lines)
+    const nearest = nearestLine(facts)
     if (!nearest)
       return [
         {
@@ -87,15 +104,3 @@ export const defaultRange = defineRule({
     return found
   },
 })
-
-/** The line whose upper end the target is the smallest multiple of; null where no line can be compared with. */
-function nearestLine(
-  facts: CautionFacts,
-  lines: readonly DefaultRange[],
-): { value: number; range: DefaultRange } | null {
-  const compared = lines.flatMap((range) => {
-    const value = targetOnBasisOf(facts, range)
-    return value === null ? [] : [{ value, range }]
-  })
-  return compared.sort((a, b) => a.value / a.range.high - b.value / b.range.high)[0] ?? null
-}

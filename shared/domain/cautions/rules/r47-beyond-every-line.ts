@@ -1,5 +1,6 @@
 import { doseOf } from '../caution-param.ts'
 import { defineRule } from '../caution-rule.ts'
+import { isForWater, linesOfAgent } from '../dose-lines.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
 import { bareShareOf, targetOnBasisOf } from '../target-on-basis.ts'
@@ -19,13 +20,15 @@ export const beyondEveryLine = defineRule({
   parameters: {
     beyondFactor: { default: 10, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
-  uses: ['order.target', 'order.agentRanges', 'lot.densityGPerMl'],
+  uses: ['order.target', 'order.agentRanges', 'water.kind', 'lot.densityGPerMl'],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { beyondFactor }) {
     const target = valueOf(facts.order.target)
-    const lines = (valueOf(facts.order.agentRanges) ?? []).filter(({ high }) => high > 0)
     if (!target) return []
+    const all = linesOfAgent(facts)
+    const own = all.filter((line) => isForWater(line, facts))
+    const lines = own.length > 0 ? own : all
     const compared = lines.flatMap((range) => {
       const value = targetOnBasisOf(facts, range)
       return value === null ? [] : [{ share: value / range.high, range }]

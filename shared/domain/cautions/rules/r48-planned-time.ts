@@ -1,11 +1,15 @@
 import { addHours, compareInstants, hoursBetween } from '../../time/instant-arithmetic.ts'
 import { doseWindow } from '../../schedule/dose-window.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
+import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
 
 const hoursPerDay = 24
 
-/** Whether the plan of an order is one for the days to come, and counts what an earlier version of it already gave. */
+/**
+ * Whether the plan of an order is one for the days to come and of a length that one looks ahead, and counts what an
+ * earlier version of it already gave.
+ */
 export const plannedTime = defineRule({
   id: 'R48',
   levels: ['note', 'warning'],
@@ -13,11 +17,12 @@ export const plannedTime = defineRule({
   overridable: true,
   parameters: {
     aheadDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
+    planDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.startsAt', 'order.spacing'],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
-  judge(facts, { aheadDays }) {
+  judge(facts, { aheadDays, planDays }) {
     const startsAt = valueOf(facts.order.startsAt)
     const spacing = valueOf(facts.order.spacing)
     if (startsAt === null) return []
@@ -33,6 +38,14 @@ export const plannedTime = defineRule({
         level: 'warning',
         params: { startsAt, limitDays: aheadDays },
         resolvedBy,
+      })
+    const days = spacing ? (spacing.intervalHours * (spacing.plannedDoses - 1)) / hoursPerDay : 0
+    if (exceeds(days, planDays))
+      found.push({
+        code: 'plan-long',
+        level: 'warning',
+        params: { days: Math.ceil(days), limitDays: planDays },
+        resolvedBy: ['check-plan'],
       })
     const lastAt = spacing?.lastGivenAt ?? null
     if (given > 0 && spacing && lastAt !== null) {
