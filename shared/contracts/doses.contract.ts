@@ -166,6 +166,7 @@ export const BathSheet = z.object({
   first: Calculation.nullable().describe('First calculation for this dose'),
   second: Calculation.extend({
     agrees: z.boolean().describe('Agrees with the first'),
+    alone: z.boolean().describe('Made by the same person as the first: nobody else could be reached'),
     differs: z
       .array(z.enum(['enclosure', 'mark', 'lot', 'strength', 'amount']))
       .describe('What does not agree with the first calculation, the order or the label'),
@@ -183,6 +184,9 @@ export const BathSheet = z.object({
     .enum(['may-not', 'no-first', 'same-person', 'amount-seen', 'begin-again'])
     .nullable()
     .describe('Why the person who asks cannot calculate a second time now; null when they can'),
+  repeatAt: Instant.nullable().describe(
+    'From when whoever made the first may repeat it alone where nobody else can be reached; null for everybody else',
+  ),
   mayStart: z.boolean().describe('Nothing stands in the way of giving it now'),
   why: z.array(z.string()).describe('What stands in the way'),
   recorded: z.array(RecordedDose).describe('Records of this dose'),
@@ -254,6 +258,12 @@ export const calculateSecond = contract({
     lotRead: z.string().trim().min(1).max(60).describe('Lot as read from the container'),
     strengthRead: EnteredQuantity.describe('Strength as read from the container'),
     amount: EnteredQuantity.describe('Amount as worked out by the second person'),
+    nobodyReached: z
+      .literal(true)
+      .optional()
+      .describe(
+        'Said by whoever made the first: no other person is here or can be reached, and they repeat it themselves, minutes later; the dose is marked so',
+      ),
   }),
   reply: { 201: BathSheet },
   problems: [

@@ -67,6 +67,8 @@ export const sheetWords = defineMessages({
   second: 'Second calculation',
   secondWaits: 'Another person works it out on their own device or on yours, from label, mark and container.',
   secondWho: 'A veterinarian, technician or keeper who is not you opens this sheet under their own name.',
+  secondAlone: 'Nobody else can be reached',
+  secondByAlone: 'Made by the same person: nobody else could be reached. The dose is marked so.',
   secondNotNeeded: 'No second calculation is needed for this dose.',
   secondAgrees: (p: { by: string; at: string; amount: string }) =>
     `${p.by}, ${p.at}: ${p.amount}. The two agree.`,
@@ -227,6 +229,9 @@ export const secondWords = defineMessages({
   samePerson: 'You made the first calculation',
   samePersonBody:
     'The second has to be another person’s: any veterinarian, technician or keeper who signs in under their own name.',
+  alone: 'Nobody else can be reached: I repeat it myself',
+  aloneBody: (p: { from: string }) =>
+    `From ${p.from} you may repeat it yourself: read label, mark and container again, and work the amount out anew. Ask somebody elsewhere first, who can work from photographs of the label and the balance. The dose is marked for the veterinarian.`,
   noFirst: 'There is no first calculation yet',
   noFirstBody: 'A veterinarian or technician works the amount out first, with the lot in the hand.',
   mayNot: 'Your roles do not include this',

@@ -20,6 +20,11 @@ export const doseWords = defineMessages({
   secondDisagrees: 'The two calculations do not agree. Both begin again from the label.',
   firstMissing: 'Ask the first person to calculate.',
   samePerson: 'The second calculation is another person’s.',
+  repeatEarly: (p: { from: string }) =>
+    `You made the first calculation. Ask another person. Where nobody can be reached you may repeat it yourself from ${p.from}.`,
+  calculatedAlone: 'No second person calculated the amount',
+  calculatedAloneText: (p: { by: string }) =>
+    `Nobody else could be reached. ${p.by} worked it out, and again some minutes later from label, mark and container. A veterinarian reviews it.`,
   amountSeen:
     'You have been shown the amount of this dose, so your calculation would not be blind. Ask somebody who has not seen it.',
   beginAgain: 'The first is worked out anew before the second. Then both begin again from the label.',

@@ -92,6 +92,47 @@ describe('a second calculation is blind', () => {
     await house.give(number).expect(201)
   })
 
+  it('and where nobody else can be reached, the same person repeats it after five minutes; the dose is marked so', async () => {
+    const number = await aBathToCalculate()
+    const repeat = (given: object = {}) => house.calculateSecond(bath, number, given, house.technician)
+    const after = (minutes: number) => api.clock.set(new Date(testDay.getTime() + minutes * 60_000))
+    const unsaid = await repeat()
+    expect([unsaid.status, unsaid.body.code]).toEqual([403, 'another-person-needed'])
+    expect((await blindSheet(number, house.technician)).repeatAt).toBe(
+      new Date(testDay.getTime() + 5 * 60_000).toISOString(),
+    )
+    expect((await blindSheet(number, house.second)).repeatAt).toBeNull()
+    after(4.9)
+    const early = await repeat({ nobodyReached: true })
+    expect([early.status, early.body.code]).toEqual([403, 'another-person-needed'])
+    expect(early.body.detail).toContain('you may repeat it yourself from')
+    // it is no way round for somebody else who was shown the amount
+    const keeper = await api.as('keeper')
+    await keeper.agent.get(house.doseAt(number)).expect(200)
+    after(5)
+    expect((await house.calculateSecond(bath, number, { nobodyReached: true }, keeper)).status).toBe(403)
+    const done = await repeat({ nobodyReached: true }).expect(201)
+    expect(done.body.second).toMatchObject({ agrees: true, alone: true })
+    const given = await house.give(number).expect(201)
+    expect(given.body.recorded[0].exceptions).toMatchObject([
+      { ruleId: 'R39', code: 'calculated-alone', level: 'warning' },
+    ])
+    const veterinarian = await api.as('veterinarian')
+    const today = (await veterinarian.agent.get('/api/today').expect(200)).body
+    expect(JSON.stringify(today)).toContain(`dose-exceptions:${given.body.recorded[0].id}`)
+  })
+
+  it('where a repeat by the same person disagrees, it begins again as well', async () => {
+    const number = await aBathToCalculate()
+    api.clock.set(new Date(testDay.getTime() + 6 * 60_000))
+    const wrong = { nobodyReached: true, amount: { value: '2180', unit: 'mL' } }
+    const differs = await house.calculateSecond(bath, number, wrong, house.technician).expect(201)
+    expect(differs.body).toMatchObject({ second: { agrees: false, alone: true }, repeatAt: null })
+    const again = await house.calculateSecond(bath, number, { nobodyReached: true }, house.technician)
+    expect([again.status, again.body.code]).toEqual([409, 'calculations-begin-again'])
+    expect((await house.give(number)).status).toBe(409)
+  })
+
   it('and compares the mark that was read with the depth that the volume rests on', async () => {
     const number = await aBathToCalculate()
     const unit = await house.calculateSecond(bath, number, { markRead: '0.68' })

@@ -27,7 +27,8 @@ import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
 import type { LotNamed } from './lot-of-order.ts'
 import { isAmountNow, obstacles } from './judge-dose.ts'
 import { firstOf, secondOf } from './second-person.ts'
-import { concentrationGiven, exceptionsOf, judgeAmount } from './judge-record.ts'
+import { concentrationGiven, exceptionsOf, judgeAmount, marksOfCalculations } from './judge-record.ts'
+import type { Exception } from './judge-record.ts'
 
 interface DoseToWrite {
   id: string
@@ -37,6 +38,8 @@ interface DoseToWrite {
   lotId: string | null
   note: string | null
   secondCalculationId: string | null
+  /** What is known to deviate before it is judged as a fact. */
+  marks: Exception[]
 }
 
 export function createAdministrationsService(parts: AdministrationsParts) {
@@ -44,7 +47,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
     const happened = given.kind === 'given' || given.kind === 'recorded'
     const isFact = given.kind === 'recorded'
     const lot = given.lotId === null ? null : await readLotNamed(tx, situation, given.lotId)
-    const exceptions = isFact ? exceptionsOf(situation, { ...given, lot }) : []
+    const exceptions = [...given.marks, ...(isFact ? exceptionsOf(situation, { ...given, lot }) : [])]
     const times = {
       happenedAt: given.happenedAt,
       happenedOn: await parts.facility.dateOf(given.happenedAt, tx),
@@ -158,6 +161,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           lotId: given.lotId,
           note: given.note ?? null,
           secondCalculationId: secondOf(calculations)?.id ?? null,
+          marks: marksOfCalculations(calculations),
         })
       })
     },
@@ -192,6 +196,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           lotId: given.lotId,
           note: given.note ?? null,
           secondCalculationId: null,
+          marks: [],
         })
       })
     },

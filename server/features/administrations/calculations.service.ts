@@ -14,7 +14,7 @@ import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered, strengthEntered } from './entered-amounts.ts'
 import { refuseOtherLot } from './lot-of-order.ts'
-import { firstOf, secondRefusal, secondShut } from './second-person.ts'
+import { firstOf, refuseSecond, secondRefusal } from './second-person.ts'
 
 const allowedDrift = ({ content }: DoseSituation) => content.fields.allowedVolumeDriftPercent
 
@@ -104,10 +104,14 @@ export function createCalculations(parts: AdministrationsParts) {
         const calculations = await parts.calculations(situation.versionId, key, tx)
         // sent again: the answer is the one of the first time
         if (calculations.all.some((one) => one.id === given.id && one.part === 'second')) return
-        const shut = secondShut(calculations, context.actor)
+        const { enclosureRead, markRead, lotRead, nobodyReached = false } = given
+        refuseSecond(calculations, context.actor, {
+          nobodyReached,
+          at: tx.at,
+          zone: situation.block.zone,
+        })
         const first = firstOf(calculations)
-        if (shut !== null || !first) throw secondRefusal(shut ?? 'no-first')
-        const { enclosureRead, markRead, lotRead } = given
+        if (!first) throw secondRefusal('no-first')
         if (judgeMark(markRead, situation.marks, allowedDrift(situation)) === 'unreadable')
           throw refusedInput('/markRead', doseWords.markUnreadable, 'mark-unreadable')
         const { differs, agreement } = compareCalculations(comparedWith(situation, first), {
@@ -149,6 +153,7 @@ export function createCalculations(parts: AdministrationsParts) {
               markRead,
               lotRead,
               differs,
+              alone: first.recorded_by === tx.actor.personId,
             },
             clinical: true,
           })

@@ -9,6 +9,8 @@ import type { DoseSituation } from './dose-situation.ts'
 import { divisionOf } from './judge-dose.ts'
 import type { LotNamed } from './lot-of-order.ts'
 import { saidForSheet } from './present-sheet.ts'
+import { secondOf, wasRepeatedAlone } from './second-person.ts'
+import type { Calculations } from './second-person.ts'
 
 export interface Exception {
   ruleId: string
@@ -75,6 +77,21 @@ function sayTimes(times: number | null): string {
   if (times <= 1 / worthSaying)
     return doseWords.timesLess({ times: String(Number((1 / times).toPrecision(figures))) })
   return ''
+}
+
+/** What the veterinarian is to see of the calculations of a dose that was given under the conditions. */
+export function marksOfCalculations(calculations: Calculations): Exception[] {
+  if (!wasRepeatedAlone(calculations)) return []
+  return [
+    {
+      ruleId: 'R39',
+      code: 'calculated-alone',
+      level: 'warning',
+      title: doseWords.calculatedAlone,
+      text: doseWords.calculatedAloneText({ by: secondOf(calculations)?.by_name ?? '' }),
+      resolve: [],
+    },
+  ]
 }
 
 /** What a record of a dose that was given breaks: kept with it, for the veterinarian. Nothing here refuses it. */

@@ -21,7 +21,7 @@ import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { needsSecond, obstacles, overrideFor } from './judge-dose.ts'
-import { firstOf, secondOf, secondShut, secondStands } from './second-person.ts'
+import { firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 
 type SheetCaution = RecordedDose['exceptions'][number]
@@ -124,11 +124,16 @@ function presentSecond(
     amountText: hide && !mine ? null : textOf(second.amount_entered_value, second.amount_entered_unit),
     mine,
     agrees: second.agrees ?? false,
+    alone: isByTheSame(first, second),
     differs: first && second.agrees === false ? differsOf(situation, first, second) : [],
     markCompared: situation.marks.depths.length > 0 || situation.marks.fillMark !== null,
     differencePercent: hide ? null : second.difference_percent,
   }
 }
+
+/** Whether whoever made the first made this one of it as well. */
+const isByTheSame = (first: CalculationReadRow | undefined, second: CalculationReadRow): boolean =>
+  first?.recorded_by === second.recorded_by && second.recorded_at >= first.recorded_at
 
 function differsOf(situation: DoseSituation, first: CalculationReadRow, second: CalculationReadRow) {
   const quantity = (value: string | null, unit: string | null): Quantity => ({
@@ -334,6 +339,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     first: presentFirst(first, hide, actor),
     second: presentSecond(situation, first, second, hide, actor),
     secondShut: secondShut(calculations, actor),
+    repeatAt: repeatFrom(calculations, actor)?.toISOString() ?? null,
     mayStart: why.length === 0,
     why,
     recorded: [...own, ...struck.filter((one) => one.dose_key === planned.key)].map((record) =>

@@ -2,6 +2,7 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
+import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
 
@@ -28,6 +29,45 @@ export function mustBeginAgain(calculations: Calculations): boolean {
   const first = firstOf(calculations)
   const second = secondOf(calculations)
   return first !== undefined && second?.agrees === false && second.recorded_at >= first.recorded_at
+}
+
+/**
+ * Nobody else on site or to be reached: whoever made the first repeats it after so many minutes.
+ *
+ * @source treatments reference, steps of the second calculation: project default (P)
+ */
+const repeatAfterMinutes = 5
+
+/** From when a person may repeat alone what they worked out first; null for everybody else, and once the two disagree. */
+export function repeatFrom(calculations: Calculations, actor: Actor): Date | null {
+  const first = firstOf(calculations)
+  if (!first || first.recorded_by !== actor.personId || mustBeginAgain(calculations)) return null
+  return secondStands(calculations)
+    ? null
+    : new Date(first.recorded_at.getTime() + repeatAfterMinutes * 60_000)
+}
+
+/** Whether the second calculation that stands is a repeat by the person of the first. */
+export function wasRepeatedAlone(calculations: Calculations): boolean {
+  const second = secondOf(calculations)
+  return secondStands(calculations) && second?.recorded_by === firstOf(calculations)?.recorded_by
+}
+
+/** Refuses a second calculation by somebody who may not make it now, and a repeat by the same person before its time. */
+export function refuseSecond(
+  calculations: Calculations,
+  actor: Actor,
+  given: { nobodyReached: boolean; at: Date; zone: string },
+): void {
+  const shut = secondShut(calculations, actor)
+  if (shut === null) return
+  if (shut !== 'same-person' || !given.nobodyReached) throw secondRefusal(shut)
+  const from = repeatFrom(calculations, actor)
+  if (from === null) throw secondRefusal('begin-again')
+  if (given.at < from)
+    throw new Problem('another-person-needed', {
+      detail: doseWords.repeatEarly({ from: sayInstant(from.toISOString(), given.zone) }),
+    })
 }
 
 /** Why a person cannot calculate a second time now; null when they can. */

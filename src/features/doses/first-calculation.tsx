@@ -1,7 +1,9 @@
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sayDate } from '../../../shared/messages/say-date.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
+import { ButtonLink } from '../../ui/button-link.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 
 type Lot = BathSheet['lots'][number]
@@ -77,6 +79,7 @@ export function SecondStanding({ sheet, zone }: { sheet: BathSheet; zone: string
     <section className="stack" aria-live="polite">
       <h2 className="t-head">{words.second}</h2>
       {isCurrent && !second.markCompared ? <p className="t-2">{words.markNotCompared}</p> : null}
+      {isCurrent && second.alone ? <p className="t-2">{words.secondByAlone}</p> : null}
       {isCurrent ? (
         <p className={second.agrees ? undefined : 'text-magenta t-strong'}>
           {second.agrees
@@ -91,6 +94,11 @@ export function SecondStanding({ sheet, zone }: { sheet: BathSheet; zone: string
         <>
           <p>{words.secondWaits}</p>
           <p className="t-2">{words.secondWho}</p>
+          {sheet.repeatAt === null ? null : (
+            <ButtonLink kind="plain" to={`${paths.orderSheet(sheet.number)}?dose=${sheet.key}&part=second`}>
+              {words.secondAlone}
+            </ButtonLink>
+          )}
         </>
       )}
     </section>

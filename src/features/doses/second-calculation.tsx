@@ -47,7 +47,12 @@ export function SecondCalculation({ sheet, zone }: { sheet: BathSheet; zone: str
       {secondShut === null ? (
         <SecondForm sheet={sheet} what={what} />
       ) : (
-        <Shut sheet={sheet} why={secondShut} />
+        <>
+          <Shut sheet={sheet} why={secondShut} />
+          {sheet.repeatAt === null ? null : (
+            <RepeatAlone sheet={sheet} from={sayMoment(sheet.repeatAt, zone, sheet.now)} what={what} />
+          )}
+        </>
       )}
       <div className="stack">
         <ButtonLink kind="plain" to={`${paths.orderSheet(number)}?dose=${key}&part=whole`}>
@@ -81,6 +86,20 @@ function Shut({ sheet, why }: { sheet: BathSheet; why: NonNullable<BathSheet['se
   )
 }
 
+/** Whoever made the first, with nobody else to be reached: says so, and then repeats every entry. */
+function RepeatAlone({ sheet, from, what }: { sheet: BathSheet; from: string; what: ReactNode }) {
+  const [isAlone, setAlone] = useState(false)
+  if (isAlone) return <SecondForm sheet={sheet} what={what} isAlone />
+  return (
+    <div className="stack">
+      <p>{words.aloneBody({ from })}</p>
+      <Button size="touch" onClick={() => setAlone(true)}>
+        {words.alone}
+      </Button>
+    </div>
+  )
+}
+
 /** What did not agree, to whoever made the second calculation; nothing of the first is told. */
 function Differing({ of }: { of: BathSheet['second'] }) {
   if (of === null || of.agrees) return null
@@ -93,7 +112,15 @@ function Differing({ of }: { of: BathSheet['second'] }) {
   )
 }
 
-function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
+function SecondForm({
+  sheet,
+  what,
+  isAlone = false,
+}: {
+  sheet: BathSheet
+  what: ReactNode
+  isAlone?: boolean
+}) {
   const { number, key } = sheet
   const units = amountUnits(sheet)
   const [form, setForm] = useState(() => emptySecond(units[0] ?? 'g'))
@@ -107,7 +134,7 @@ function SecondForm({ sheet, what }: { sheet: BathSheet; what: ReactNode }) {
   const send = async () => {
     if (shut !== false) return
     const done = await refusal.attempt(async () => {
-      const reply = await calculate.mutateAsync(secondBody(form, id))
+      const reply = await calculate.mutateAsync(secondBody(form, id, isAlone))
       setId(newId())
       // begun again from the label: nothing of the last try stays
       if (reply.second?.agrees) say({ words: words.agrees })

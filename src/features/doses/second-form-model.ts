@@ -41,9 +41,11 @@ export function secondIsOpen(form: SecondForm): string | false {
   return isNumber(form.amount) ? false : words.typeAmount
 }
 
-export function secondBody(form: SecondForm, id: string): BodyOf<typeof calculateSecond> {
+/** @param isAlone made by whoever made the first, because nobody else can be reached */
+export function secondBody(form: SecondForm, id: string, isAlone = false): BodyOf<typeof calculateSecond> {
   return {
     id,
+    ...(isAlone ? { nobodyReached: true as const } : {}),
     enclosureRead: form.enclosure.trim(),
     markRead: form.mark.trim(),
     lotRead: form.lot.trim(),

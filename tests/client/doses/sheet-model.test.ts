@@ -31,6 +31,7 @@ const second = {
   agrees: true,
   differs: [],
   markCompared: true,
+  alone: false,
   differencePercent: 0.5,
 }
 const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
@@ -97,6 +98,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   first: null,
   second: null,
   secondShut: null,
+  repeatAt: null,
   mayStart: false,
   why: ['x'],
   recorded: [],
