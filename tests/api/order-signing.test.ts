@@ -112,7 +112,9 @@ describe('what may be signed: an order', () => {
       code: 'caution-stops',
       cautions: [{ ruleId: 'R49', code: 'line-of-other-water', overridable: true }],
     })
-    expect(refused.body.cautions[0].text).toBe('The dose line is for sea water. This is fresh water.')
+    expect((await shownCautions(api, draft.number)).find(({ ruleId }) => ruleId === 'R49')?.text).toBe(
+      'The dose line is for sea water. This is fresh water.',
+    )
     const reason = 'the only figure there is; watched through the whole bath'
     expect((await signDraft(api, draft, { overrides: [{ ruleId: 'R49', reason }] })).status).toBe(201)
   })
