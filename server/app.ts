@@ -1,4 +1,3 @@
-import connectPgSimple from 'connect-pg-simple'
 import express from 'express'
 import type { Express, RequestHandler } from 'express'
 import { rateLimit } from 'express-rate-limit'
@@ -15,6 +14,7 @@ import { Problem } from './platform/http/problem.ts'
 import { createRateLimitStore } from './platform/http/rate-limit-store.ts'
 import { giveRequestId, requestIdOf } from './platform/http/request-id.ts'
 import { securityHeaders } from './platform/http/security-headers.ts'
+import { createSessionStore } from './platform/http/session-store.ts'
 import { problemEdge, unknownRoute } from './platform/http/to-problem.ts'
 
 const sessionHours = 8
@@ -40,12 +40,7 @@ export function createApp({ config, composition, pages }: AppParts): { app: Expr
   app.use(pinoHttp({ logger: parts.log, genReqId: (req) => requestIdOf(req as express.Request) }))
   if (config.mode !== 'development') app.use(securityHeaders(tls))
 
-  const PgStore = connectPgSimple(session)
-  const store = new PgStore({
-    pool: poolOf(parts.dataSource),
-    tableName: 'session',
-    pruneSessionInterval: 900,
-  })
+  const store = createSessionStore(poolOf(parts.dataSource))
   const api = express.Router()
 
   api.get('/health', (_req, res) => void res.json({ status: 'ok' }))

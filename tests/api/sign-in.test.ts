@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import pg from 'pg'
 import request from 'supertest'
 import { password, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
@@ -163,6 +164,36 @@ describe('sign-in', () => {
     })
     await someone.agent.post('/api/sign-out').expect(204)
     await someone.agent.get('/api/me').expect(401)
+  })
+
+  it('lets a session live on while it is used, and writes that once a minute', async () => {
+    const owner = new pg.Client({ connectionString: api.ownerUrl })
+    await owner.connect()
+    try {
+      const email = 'stays@harrow-point.example'
+      const someone = await api.person({ email, printedName: 'Stays', roles: ['keeper'] })
+      const endsSoon = async () => {
+        const ended = await owner.query(
+          `UPDATE session SET expire = now() + interval '5 minutes' WHERE sess #>> '{passport,user}' = $1`,
+          [someone.id],
+        )
+        expect(ended.rowCount).toBe(1)
+      }
+      const hoursLeft = async () => {
+        await someone.agent.get('/api/me').expect(200)
+        const { rows } = await owner.query<{ hours: string }>(
+          `SELECT extract(epoch FROM expire - now()) / 3600 AS hours FROM session WHERE sess #>> '{passport,user}' = $1`,
+          [someone.id],
+        )
+        return Number(rows[0]?.hours)
+      }
+      await endsSoon()
+      expect(await hoursLeft()).toBeGreaterThan(7)
+      await endsSoon()
+      expect(await hoursLeft()).toBeLessThan(1)
+    } finally {
+      await owner.end()
+    }
   })
 
   it('refuses a state-changing request from another site', async () => {
