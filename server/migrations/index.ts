@@ -14,6 +14,8 @@ import { RecordRequests1764600000024 } from './0024-record-requests.ts'
 import { DoseVoids1764600000025 } from './0025-dose-voids.ts'
 import { Bodies1764600000026 } from './0026-bodies.ts'
 import { PlainText1764600000029 } from './0029-plain-text.ts'
+import { RowMarks1764600000032 } from './0032-row-marks.ts'
+import { DoseOverrides1764600000033 } from './0033-dose-overrides.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -34,4 +36,6 @@ export const migrations = [
   DoseVoids1764600000025,
   Bodies1764600000026,
   PlainText1764600000029,
+  RowMarks1764600000032,
+  DoseOverrides1764600000033,
 ]

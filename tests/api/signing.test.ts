@@ -40,7 +40,7 @@ async function signSomething(): Promise<{ id: string; hash: string }> {
 describe('signing', () => {
   it('shows name, licence, day, zone and meaning, and finds the text intact', async () => {
     const { id, hash } = await signSomething()
-    const { block, content } = await api.composition.signing.service.readSealed(id)
+    const { block, content } = await api.composition.signing.service.readSealed(id, api.clock.now())
     expect(content).toEqual({ amount: '0.44 g', note: 'µ ° é' })
     expect(block).toMatchObject({
       printedName: 'Test veterinarian',
@@ -62,20 +62,22 @@ describe('signing', () => {
   it('is shown as broken when the text was changed in the database, even together with its hash', async () => {
     const { id } = await signSomething()
     await owner.query(`UPDATE signed_texts SET text = replace(text, '0.44', '4.4') WHERE id = $1`, [id])
-    expect((await api.composition.signing.service.readSealed(id)).block.state).toBe('broken')
+    expect((await api.composition.signing.service.readSealed(id, api.clock.now())).block.state).toBe('broken')
     await owner.query(
       `UPDATE signed_texts SET hash = encode(sha256(convert_to(text, 'UTF8')), 'hex') WHERE id = $1`,
       [id],
     )
-    expect((await api.composition.signing.service.readSealed(id)).block.state).toBe('broken')
+    expect((await api.composition.signing.service.readSealed(id, api.clock.now())).block.state).toBe('broken')
     await owner.query(`UPDATE signed_texts SET text = 'no JSON' WHERE id = $1`, [id])
-    expect((await api.composition.signing.service.readSealed(id)).block.state).toBe('broken')
+    expect((await api.composition.signing.service.readSealed(id, api.clock.now())).block.state).toBe('broken')
   })
 
   it('says so when the signature was made by another installation', async () => {
     const { id } = await signSomething()
     await owner.query(`UPDATE signed_texts SET key_id = '0123456789abcdef' WHERE id = $1`, [id])
-    expect((await api.composition.signing.service.readSealed(id)).block.state).toBe('unknown-key')
+    expect((await api.composition.signing.service.readSealed(id, api.clock.now())).block.state).toBe(
+      'unknown-key',
+    )
   })
 
   it('asks for the signer’s own password, and locks after five wrong ones', async () => {

@@ -7,6 +7,7 @@ import { compose } from '../../server/composition.ts'
 import type { Composition } from '../../server/composition.ts'
 import { seedDemo } from '../../server/demo/seed-demo.ts'
 import { verifyAnimals } from '../../server/features/animals/index.ts'
+import { verifyRows } from '../../server/platform/audit/verify-rows.ts'
 import { entities } from '../../server/entities.ts'
 import { verifyChain } from '../../server/platform/audit/verify-chain.ts'
 import { settableClock } from '../../server/platform/clock.ts'
@@ -200,6 +201,9 @@ describe('the practice scenario', () => {
       'NSW-H-12': ['expired', 10],
     })
     expect((await verifyAnimals(dataSource)).faults).toEqual([])
+    const kept = await verifyRows(dataSource)
+    expect(kept.faults).toEqual([])
+    expect(kept.rows).toBeGreaterThan(1000)
   })
 
   it('holds in its audit chain', async () => {

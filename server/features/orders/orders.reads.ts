@@ -1,5 +1,6 @@
 import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
+import type { SigningChain } from './signing-chain.ts'
 
 /** The columns of a signed version, and whom it names. */
 export interface Copies {
@@ -35,13 +36,27 @@ export interface OrderReadRow {
   ended: boolean
   done_keys: string[]
   given: number
+  /** A timed bath went in and has no end. */
+  running: boolean
   /** The signed version in force as its columns say it; null while none is signed. */
   copies: Copies | null
+  /** What there is of its signings: an order with a link missing is not what was signed. */
+  chain: SigningChain
 }
 
 /** Of the version that a query calls v. */
 const copiesColumn = `json_build_object('version', to_jsonb(v.*),
     'animalIds', coalesce((SELECT json_agg(a.animal_id) FROM order_version_animals a WHERE a.order_version_id = v.id), '[]'))`
+
+/** Of the order that a query calls o. */
+const chainColumn = `json_build_object(
+    'signings', (SELECT coalesce(json_agg(e.text ORDER BY e.seq), '[]') FROM audit_entries e
+                  WHERE e.subject_kind = 'order' AND e.subject_id = o.id::text AND e.action IN ('order.sign', 'order.amend')),
+    'versions', (SELECT coalesce(json_agg(json_build_object('versionNo', x.version_no, 'hash', y.hash)), '[]')
+                   FROM order_versions x LEFT JOIN signed_texts y ON y.id = x.signed_text_id WHERE x.order_id = o.id),
+    'looseTexts', (SELECT count(*) FROM signed_texts y
+                    WHERE y.subject_kind = 'order' AND y.subject_id = o.id
+                      AND NOT EXISTS (SELECT 1 FROM order_versions x WHERE x.signed_text_id = y.id)))`
 
 const columns = `
   o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
@@ -55,7 +70,11 @@ const columns = `
              WHERE x.order_id = o.id), '{}') AS done_keys,
   (SELECT count(*)::int FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
     WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
-  CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies`
+  EXISTS (SELECT 1 FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+           WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND x.contact_minutes IS NOT NULL
+             AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)) AS running,
+  CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
+  ${chainColumn} AS chain`
 
 const tables = `
   FROM orders o
@@ -105,7 +124,8 @@ export function readVersions(db: Db, orderId: string): Promise<VersionReadRow[]>
 export interface StoredVersionRow {
   id: string
   number: string
-  text: string
+  /** Null, with all of its seal, where the signed text is gone. */
+  text: string | null
   hash: string
   signature: string
   key_id: string
@@ -116,9 +136,28 @@ export interface StoredVersionRow {
 export function readStoredVersions(db: Db): Promise<StoredVersionRow[]> {
   return db.query(
     `SELECT o.id, o.number, t.text, t.hash, t.signature, t.key_id, ${copiesColumn} AS copies
-       FROM order_versions v JOIN orders o ON o.id = v.order_id JOIN signed_texts t ON t.id = v.signed_text_id
+       FROM order_versions v JOIN orders o ON o.id = v.order_id LEFT JOIN signed_texts t ON t.id = v.signed_text_id
       ORDER BY o.number, v.version_no`,
   )
+}
+
+/** What there is of the signings of every order. */
+export function readSigningChains(db: Db): Promise<{ number: string; chain: SigningChain }[]> {
+  return db.query(`SELECT o.number, ${chainColumn} AS chain FROM orders o ORDER BY o.number`)
+}
+
+/** Numbers of orders that were signed, by the audit trail or by a signed text, and are gone with all their versions. */
+export async function readGoneOrders(db: Db): Promise<string[]> {
+  const rows: { label: string }[] = await db.query(
+    `SELECT e.subject_label AS label FROM audit_entries e
+      WHERE e.subject_kind = 'order' AND e.action IN ('order.sign', 'order.amend')
+        AND NOT EXISTS (SELECT 1 FROM orders o WHERE o.id::text = e.subject_id)
+      UNION
+     SELECT t.subject_label FROM signed_texts t
+      WHERE t.subject_kind = 'order' AND NOT EXISTS (SELECT 1 FROM orders o WHERE o.id = t.subject_id)
+      ORDER BY label`,
+  )
+  return rows.map(({ label }) => label)
 }
 
 export interface EventReadRow {
@@ -153,7 +192,7 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
   return db.query(
     `SELECT d.dose_key, d.kind, d.happened_at, d.amount_entered_value, d.amount_entered_unit,
             p.printed_name AS by_name,
-            (SELECT min(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at
+            (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at
        FROM live_doses d
        JOIN order_versions v ON v.id = d.order_version_id
        LEFT JOIN people p ON p.id = d.recorded_by

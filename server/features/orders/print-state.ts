@@ -1,5 +1,12 @@
+import { Problem } from '../../platform/http/problem.ts'
 import type { AnswerForPrint } from '../documents/index.ts'
 import type { OrderQueries } from './orders.queries.ts'
+
+/** What was printed and is there no more was taken away. */
+function whereGone(error: unknown): null {
+  if (error instanceof Problem && (error.code === 'broken-record' || error.code === 'not-found')) return null
+  throw error
+}
 
 /**
  * Whether a printed order, or a bath sheet printed from it, may still be acted on: the gravest answer first. A version
@@ -7,7 +14,8 @@ import type { OrderQueries } from './orders.queries.ts'
  */
 export function answerForOrderPrints(queries: OrderQueries): AnswerForPrint {
   return async (print) => {
-    const printed = await queries.sealed(print.subject_label, Number(print.version))
+    const printed = await queries.sealed(print.subject_label, Number(print.version)).catch(whereGone)
+    if (!printed) return { state: 'broken', now: null }
     const newest = printed.superseded
       ? (await queries.sealed(print.subject_label, undefined)).versionNo
       : printed.versionNo

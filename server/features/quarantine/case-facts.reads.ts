@@ -77,6 +77,16 @@ export function readCaseEvents(db: Db, caseIds: readonly string[]): Promise<Case
   )
 }
 
+/** Texts that were signed about cases and that no event points at. */
+export function readLooseCaseTexts(db: Db): Promise<{ id: string; label: string }[]> {
+  return db.query(
+    `SELECT t.id, t.subject_label AS label FROM signed_texts t
+      WHERE t.subject_kind = 'case'
+        AND NOT EXISTS (SELECT 1 FROM case_events e WHERE e.signed_text_id = t.id)
+      ORDER BY t.signed_at`,
+  )
+}
+
 /** An animal of a batch: as it joined, or taken out of one that had joined (then with the joining of that one). */
 export interface BatchReadRow {
   case_id: string

@@ -37,6 +37,7 @@ import { quarantineRoutes } from './quarantine.routes.ts'
 import { createTreatmentsService } from './treatments.service.ts'
 import { createUnnamedBodies } from './unnamed-bodies.ts'
 
+export { verifySignedEvents } from './verify-signed-events.ts'
 export type { TreatmentsService } from './treatments.service.ts'
 export type { CaseEventFacts } from './case-event-facts.ts'
 

@@ -39,13 +39,16 @@ function fits(head: Pick<CaseReadRow, 'id' | 'number'>, event: CaseEventReadRow,
   )
 }
 
+/** Of an event that was signed and points at nothing any more. */
+const noText = '00000000-0000-0000-0000-000000000000'
+
 /** Reads what was signed under an event and checks it now: the text against its signature, and the row against the text. */
 export async function readSignedEvent(
   signing: SigningService,
   head: Pick<CaseReadRow, 'id' | 'number'>,
   event: CaseEventReadRow,
 ): Promise<SignedEvent> {
-  const { block, content } = await signing.readSealed(event.signed_text_id ?? '')
+  const { block, content } = await signing.readSealed(event.signed_text_id ?? noText, event.recorded_at)
   const state = block.state === 'intact' && !fits(head, event, content) ? 'broken' : block.state
   const said = content as unknown as ClearanceContent | null
   const clearance = event.kind === 'cleared' && said?.kind === 'quarantine-clearance' ? said : null

@@ -16,7 +16,7 @@ export function createSigning(parts: Parts & { signer: Signer; facility: Facilit
     ...parts,
     validLicence: (personId, at) => parts.people.questions.validLicence(personId, at),
     ownPassword: parts.people.ownPassword,
-    readSignedText: (id, tx) => readSignedText(tx?.manager ?? parts.dataSource, id),
+    readSignedText: (id) => readSignedText(parts.dataSource, id),
   })
   const { keyId, publicKeyPem } = parts.signer
   return { service, routes: [route(getSigningKey, async () => ({ keyId, publicKeyPem }))] }

@@ -20,7 +20,7 @@ export interface SigningParts {
   ownPassword: OwnPassword
   facility: FacilityService
   validLicence(personId: string, at: Date): Promise<ValidLicence | null>
-  readSignedText(id: string, tx?: Tx): Promise<SignedText | null>
+  readSignedText(id: string): Promise<SignedText | null>
 }
 
 /** Somebody who has just shown that they are themselves and may sign on this day. */
@@ -119,20 +119,42 @@ export function createSigningService(parts: SigningParts) {
       return { id, hash: seal.hash, text }
     },
 
-    /** A signed text read back and checked now: its content, and the block to show under it. */
-    async readSealed(id: string, tx?: Tx): Promise<{ content: Json; block: SignatureBlock; text: string }> {
-      const row = await parts.readSignedText(id, tx)
-      if (!row) throw new Problem('not-found')
-      return presentSealed(row, parts.signer)
+    /**
+     * A signed text read back and checked now: its content, and the block to show under it. One that is gone is shown as
+     * broken, under the time of the record that points at it.
+     */
+    async readSealed(id: string, recordedAt: Date): Promise<Sealed> {
+      const row = await parts.readSignedText(id)
+      return row ? presentSealed(row, parts.signer) : goneSealed(recordedAt)
     },
   }
 }
 
+export interface Sealed {
+  content: Json
+  block: SignatureBlock
+  text: string
+}
+
+const goneSealed = (recordedAt: Date): Sealed => ({
+  content: null,
+  text: '',
+  block: {
+    printedName: '',
+    role: '',
+    licence: null,
+    meaning: '',
+    signedAt: recordedAt.toISOString(),
+    signedOn: recordedAt.toISOString().slice(0, 10),
+    zone: 'UTC',
+    hash: '',
+    keyId: '',
+    state: 'broken',
+  },
+})
+
 /** The content and signature block of a stored signed text. A text that is no longer JSON is shown as broken, not as an error. */
-export function presentSealed(
-  row: SignedText,
-  signer: Signer,
-): { content: Json; block: SignatureBlock; text: string } {
+export function presentSealed(row: SignedText, signer: Signer): Sealed {
   const state = signer.check(row.text, row)
   const said = readText(row.text)
   const by = said?.signedBy

@@ -3,6 +3,7 @@ import type { EntityManager } from 'typeorm'
 import { canonicalJson } from '../../../shared/domain/canonical-json.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import type { RequestContext } from '../http/request-context.ts'
+import type { RowMarks } from './row-marks.ts'
 
 /** What a service notes about a change; actor, time and place in the chain are added when the transaction ends. */
 export interface AuditDraft {
@@ -27,7 +28,7 @@ export function chainHash(previousHash: string, text: string): string {
 /** Appends the entries of a transaction; the last thing it does, so that the lock is held for milliseconds. */
 export async function appendToChain(
   manager: EntityManager,
-  change: { context: RequestContext; at: Date; entries: readonly AuditDraft[] },
+  change: { context: RequestContext; at: Date; entries: readonly AuditDraft[]; rows?: RowMarks | null },
 ): Promise<void> {
   if (change.entries.length === 0) return
   await manager.query('SELECT pg_advisory_xact_lock($1)', [chainLock])
@@ -36,6 +37,7 @@ export async function appendToChain(
   )
   let seq = Number(last?.seq ?? 0)
   let previousHash = last?.hash ?? chainStart
+  const lastEntry = change.entries.at(-1)
   for (const entry of change.entries) {
     seq += 1
     const { actor, requestId } = change.context
@@ -49,6 +51,8 @@ export async function appendToChain(
       after: entry.after,
       clinical: entry.clinical ?? false,
       requestId,
+      // the rows of the whole transaction stand with its last entry
+      rows: entry === lastEntry ? (change.rows ?? undefined) : undefined,
     })
     const hash = chainHash(previousHash, text)
     await manager.query(

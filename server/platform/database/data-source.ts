@@ -2,6 +2,7 @@ import type pg from 'pg'
 import { DataSource } from 'typeorm'
 import type { EntitySchema } from 'typeorm'
 import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
+import { WrittenRows } from './written-rows.ts'
 
 export type EntityClass = (new () => object) | EntitySchema
 
@@ -15,6 +16,7 @@ export async function connectRuntime(
     type: 'postgres',
     url,
     entities: [...entities],
+    subscribers: [WrittenRows],
     synchronize: false,
     installExtensions: false,
     poolSize,

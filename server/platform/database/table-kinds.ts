@@ -52,6 +52,7 @@ export const tableKinds: Record<string, TableKind> = {
   doses: 'ledger',
   bath_stops: 'ledger',
   dose_voids: 'ledger',
+  dose_overrides: 'sealed',
   agent_experience: 'ledger',
   products: 'draft',
   product_lots: 'ledger',

@@ -6,6 +6,7 @@ import type { Actor, RequestContext } from '../http/request-context.ts'
 import type { Clock } from '../clock.ts'
 import { appendToChain } from '../audit/append-to-chain.ts'
 import type { AuditDraft } from '../audit/append-to-chain.ts'
+import { marksOfWritten } from '../audit/row-marks.ts'
 import { idAlreadyUsed } from './id-already-used.ts'
 import { problemFromConstraint } from './constraint-problems.ts'
 
@@ -132,7 +133,8 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
           context.actor.personId,
           result === undefined ? null : JSON.stringify(result),
         ])
-      await appendToChain(manager, { context, at, entries })
+      const rows = await marksOfWritten(manager)
+      await appendToChain(manager, { context, at, entries, rows })
       await runner.commitTransaction()
       return { result, later }
     } catch (error) {

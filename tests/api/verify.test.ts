@@ -1,0 +1,157 @@
+import pg from 'pg'
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { verifyOrders } from '../../server/features/orders/index.ts'
+import { verifySignedEvents } from '../../server/features/quarantine/index.ts'
+import { verifyRows } from '../../server/platform/audit/verify-rows.ts'
+import { aFormalinHouse } from '../builders/a-bath.ts'
+import type { FormalinHouse } from '../builders/a-bath.ts'
+import { aClearableCase, clear } from '../builders/a-clearance.ts'
+import { signDraft } from '../builders/an-order.ts'
+import { textOf } from '../pdf/support/poppler.ts'
+import { startApi, testDay } from '../support/api.ts'
+import type { TestApi } from '../support/api.ts'
+
+let api: TestApi
+let owner: pg.Client
+let house: FormalinHouse
+beforeAll(async () => {
+  api = await startApi()
+  owner = new pg.Client({ connectionString: api.ownerUrl })
+  await owner.connect()
+  house = await aFormalinHouse(api)
+})
+beforeEach(() => api.clock.set(testDay))
+afterAll(async () => {
+  await owner.end()
+  await api.stop()
+})
+
+const rowFaults = async () => (await verifyRows(api.composition.parts.dataSource)).faults
+const orderFaults = async () =>
+  (await verifyOrders(api.composition.parts.dataSource, api.composition.signing.service.signer)).faults
+const caseFaults = async () =>
+  (await verifySignedEvents(api.composition.parts.dataSource, api.composition.signing.service)).faults
+
+/** As the owner, past the constraints that join the tables. */
+async function byHand(...statements: [sql: string, ...values: unknown[]][]): Promise<void> {
+  await owner.query('BEGIN')
+  await owner.query(`SET LOCAL session_replication_role = replica`)
+  for (const [sql, ...values] of statements) await owner.query(sql, values)
+  await owner.query('COMMIT')
+}
+
+/** An order amended from 100 to 50 µL/L. */
+async function anAmendedOrder() {
+  const bath = await house.tankWithSchool()
+  const number = await house.signedBath(bath)
+  const vet = await api.as('veterinarian')
+  const signed = (await vet.agent.get(`/api/orders/${number}`).expect(200)).body
+  const { fields } = signed.versions[0].content
+  await vet.agent
+    .put(`/api/orders/${number}/draft`)
+    .send({ expectedVersion: signed.version, fields: { ...fields, target: { value: '50', unit: 'uL/L' } } })
+    .expect(200)
+  const reply = await signDraft(api, { number, version: signed.version + 1 })
+  expect([reply.status, reply.body.versionNo]).toEqual([201, 2])
+  return { number, id: reply.body.id as string }
+}
+
+describe('an order of which a signature is missing', () => {
+  const newest = (id: string) =>
+    `(SELECT v.id FROM order_versions v WHERE v.order_id = '${id}' ORDER BY v.version_no DESC LIMIT 1)`
+  const textOfNewest = (id: string) =>
+    `(SELECT v.signed_text_id FROM order_versions v WHERE v.order_id = '${id}' ORDER BY v.version_no DESC LIMIT 1)`
+
+  it.each([
+    ['its newest version', (id: string) => [`DELETE FROM order_versions WHERE id = ${newest(id)}`]],
+    [
+      'its newest version with its text',
+      (id: string) => [
+        `DELETE FROM signed_texts WHERE id = ${textOfNewest(id)}`,
+        `DELETE FROM order_versions WHERE id = ${newest(id)}`,
+      ],
+    ],
+    [
+      'the text of its newest version',
+      (id: string) => [`DELETE FROM signed_texts WHERE id = ${textOfNewest(id)}`],
+    ],
+  ])('by %s is broken in the list, on its sheets, on paper and for its doses', async (_, damage) => {
+    const { number, id } = await anAmendedOrder()
+    expect((await orderFaults()).filter(({ at }) => at.startsWith(number))).toEqual([])
+    await byHand(...damage(id).map((sql): [string] => [sql]))
+    const { agent } = house.technician
+    const listed = await agent.get(`/api/orders?q=${number}`).expect(200)
+    expect(listed.body.rows).toMatchObject([{ number, record: 'broken' }])
+    const shown = (await agent.get(`/api/orders/${number}`).expect(200)).body.versions
+    for (const { signature } of shown) expect(signature.state).toBe('broken')
+    expect((await house.calculateFirst(number)).body.code).toBe('broken-record')
+    expect((await house.give(number)).status).toBe(409)
+    expect((await orderFaults()).filter(({ at }) => at === number).length).toBeGreaterThan(0)
+    expect((await rowFaults()).map(({ what }) => what)).toContain('missing')
+    const print = await agent.get(`/api/orders/${number}/print`).buffer(true)
+    if (print.status === 200) expect(textOf(print.body as Buffer)).toContain('Record check failed')
+    else expect(print.body).toMatchObject({})
+  })
+
+  it('by all of them is broken, and no draft', async () => {
+    const { number, id } = await anAmendedOrder()
+    await byHand([`DELETE FROM order_versions WHERE order_id = $1`, id])
+    const { agent } = house.technician
+    expect((await agent.get(`/api/orders?q=${number}`).expect(200)).body.rows[0].record).toBe('broken')
+    expect((await agent.get(`/api/orders/${number}/print`)).status).toBe(409)
+    await byHand([`DELETE FROM orders WHERE id = $1`, id])
+    expect(await orderFaults()).toContainEqual(expect.objectContaining({ at: number, what: 'signings' }))
+  })
+})
+
+describe('a kept row that another hand changed', () => {
+  const found = async (what: string, at: string) =>
+    (await rowFaults()).filter((fault) => fault.what === what && fault.at.startsWith(at))
+
+  it('is reported: the amount of a dose, a hold made a lift, the end of a bath, a row put in', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const dose = api.nextId()
+    await house.record(number, { id: dose }).expect(201)
+    const stop = api.nextId()
+    await house.technician.agent
+      .post(`/api/doses/${dose}/stop`)
+      .send({ id: stop, cause: 'time-up', happenedAt: '2026-12-01T18:25:00Z' })
+      .expect(201)
+    const hold = api.nextId()
+    await house.technician.agent
+      .post(`/api/orders/${number}/holds`)
+      .send({ id: hold, happenedAt: '2026-12-01T18:25:00Z' })
+      .expect(201)
+    expect(await found('changed', 'doses ')).toEqual([])
+    await byHand([`UPDATE doses SET amount_entered_value = 21.8 WHERE id = $1`, dose])
+    const [amount] = await found('changed', `doses ${dose}`)
+    expect(amount?.detail).toContain('dose.recorded')
+    expect(amount?.detail).toContain(number)
+    await byHand([`UPDATE order_events SET kind = 'hold-lifted' WHERE id = $1`, hold])
+    expect(await found('changed', `order_events ${hold}`)).toHaveLength(1)
+    await byHand([`DELETE FROM bath_stops WHERE id = $1`, stop])
+    expect(await found('missing', `bath_stops ${stop}`)).toHaveLength(1)
+    await byHand([
+      `INSERT INTO order_events (id, order_id, kind, happened_at, happened_on, recorded_at, recorded_by)
+       SELECT gen_random_uuid(), e.order_id, 'hold-lifted', e.happened_at, e.happened_on, e.recorded_at, e.recorded_by
+         FROM order_events e WHERE e.id = $1`,
+      hold,
+    ])
+    expect(await found('not-by-the-program', 'order_events ')).toHaveLength(1)
+  })
+
+  it('is reported of a signed clearance: its text against its columns, and a pointer that leads nowhere', async () => {
+    const one = await aClearableCase(api)
+    await clear(await api.as('veterinarian'), one).expect(200)
+    expect(await caseFaults()).toEqual([])
+    const event = `kind = 'cleared' AND case_id = (SELECT id FROM quarantine_cases WHERE number = '${one.number}')`
+    await byHand([`UPDATE case_events SET happened_on = happened_on - 1 WHERE ${event}`])
+    expect(await caseFaults()).toMatchObject([{ at: one.number, what: 'signature' }])
+    await byHand([`UPDATE case_events SET happened_on = happened_on + 1 WHERE ${event}`])
+    expect(await caseFaults()).toEqual([])
+    await byHand([`UPDATE case_events SET signed_text_id = gen_random_uuid() WHERE ${event}`])
+    expect(await caseFaults()).toHaveLength(2)
+    expect(await found('changed', 'case_events ')).toHaveLength(1)
+  })
+})
