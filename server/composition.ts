@@ -107,6 +107,7 @@ export function compose(outside: Outside) {
   const administrations = createAdministrations({
     ...parts,
     facility: facility.service,
+    signing: signing.service,
     orders,
     animals,
     documents,

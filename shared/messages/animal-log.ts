@@ -55,6 +55,8 @@ export const discrepancyNames = defineMessages({
   'dose-amount-differs': 'another amount given than was signed and worked out.',
   'dose-of-other-product': 'another product given than was ordered.',
   'dosed-in-absence': 'a dose recorded while it was not in that water.',
+  'dose-under-broken-order': 'a dose recorded under an order that is not what was signed.',
+  'died-elsewhere': 'found dead where it was not.',
 } satisfies Record<DiscrepancyKind, string>)
 
 export const outcomeNames = defineMessages({
@@ -97,4 +99,10 @@ export const discrepancySentences = defineMessages({
     `Dose ${p.said('key')} of ${p.said('order')}: lot ${p.said('lot')} was recorded, which is ${p.said('product')} and not what was ordered.`,
   'dosed-in-absence': (p) =>
     `Dose ${p.said('key')} of ${p.said('order')} was recorded as given in ${p.said('enclosure')}; by the register no animal of the order was in that water then.`,
+  'dose-under-broken-order': (p) =>
+    `Dose ${p.said('key')} of ${p.said('order')}: ${p.said('given')} was recorded as given, and the signed order cannot be relied on: its text, or what is stored beside it, is not what was signed. Find out what was meant and what the animals were given.`,
+  'died-elsewhere': (p) =>
+    p.said('place') === ''
+      ? `${p.said('seen')} found dead in ${p.said('enclosure')}; by the register it was in no enclosure of the house then. A move was not recorded, or the number is another animal’s.`
+      : `${p.said('seen')} found dead in ${p.said('enclosure')}; by the register it was in ${p.said('place')} then. A move was not recorded, or the number is another animal’s.`,
 } satisfies Record<DiscrepancyKind, (p: Facts) => string>)

@@ -31,6 +31,10 @@ export const bathPaper = defineMessages({
   met: ' (met when printed)',
   unmet: ' (not met when printed)',
   unknown: ' (not known when printed)',
+  overridden: ' (overridden by a veterinarian)',
+  overrides: 'Overridden for this dose',
+  overriddenBy: (p: { name: string; licence: string; at: string }) =>
+    `Overridden by ${p.name}, licence ${p.licence}, ${p.at}.`,
   inTheWay: 'Stands in the way',
   cautions: 'Cautions now',
   calculations: 'Two calculations',

@@ -4,6 +4,13 @@ import type { VolumeRefusal } from '../domain/water/volume-refusal.ts'
 import { defineMessages } from './define-messages.ts'
 import type { RefusalWords } from './number-refusals.ts'
 
+/** What is asked of a record of a dose. */
+export const doseInputWords = defineMessages({
+  amountNeeded: 'Type how much was given.',
+  nothingWentIn:
+    'Nothing goes in when a dose is withheld or refused. Leave the amount out; if some of it went in, record the dose as given with what went in.',
+})
+
 /** What to do when a dose cannot be worked out. */
 export const doseRefusals = defineMessages({
   'basis-missing': () =>

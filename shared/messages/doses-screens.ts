@@ -128,6 +128,10 @@ export const sheetWords = defineMessages({
   struckReason: (p: { reason: string }) => `“${p.reason}”`,
   stopBeforeStart:
     'This end lies before the dose went in. One of the two times is wrong: strike it out and enter it anew.',
+  severalEnds: (p: { count: number }) =>
+    `${String(p.count)} ends of this bath are recorded. The latest counts. Strike out what is wrong.`,
+  otherEnd: 'Another end:',
+  strikeOtherStop: (p: { at: string }) => `Strike out the end at ${p.at}`,
   strikeDose: 'Strike out this record',
   strikeStop: 'Strike out its end',
   strikeDoseQuestion: 'Strike this record of a dose out?',
@@ -164,6 +168,21 @@ export const sheetWords = defineMessages({
   refused: 'refused by the animal',
   'not-given': 'not given any more',
   blindTitle: 'Second calculation',
+})
+
+/** Words of overriding a stop at the tank. */
+export const overrideWords = defineMessages({
+  act: 'Override for this dose',
+  question: 'Override this stop for this dose?',
+  body: 'It holds for this dose, this lot and what is recorded now, for one hour. It stands in the record under your name and licence, and on the paper.',
+  reason: 'Why it is given all the same',
+  password: 'Your password',
+  sign: 'Sign the override',
+  back: 'Do not override',
+  done: 'The override is signed.',
+  heading: 'Overridden for this dose',
+  broken: 'This override is no longer what was signed, and counts for nothing.',
+  signedAt: (p: { name: string; at: string }) => `${p.name}, ${p.at}`,
 })
 
 /** Words of a running bath. */

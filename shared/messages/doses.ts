@@ -2,12 +2,21 @@ import { defineMessages } from './define-messages.ts'
 
 /** Words about giving and recording doses. */
 export const doseWords = defineMessages({
+  anotherEnd: 'Another end of the same bath was recorded.',
   unreadable: 'The signed text of this order cannot be read any more. Do not dose; tell the administrator.',
   earlierOpen: (p: { key: string }) =>
     `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
   stillRunning: (p: { key: string; at: string }) =>
     `The bath of dose ${p.key}, begun ${p.at}, has no end. Record first when the animals were out of it or the water was changed.`,
   notIntact: 'The signed order no longer matches its signature. Do not dose; tell a veterinarian.',
+  meaningOverride: 'override of a stop for this dose',
+  overrideUnreadable: 'An override that cannot be read any more',
+  findingChanged:
+    'Nothing was signed. What was found is no longer what you were shown: look at the sheet as it is now, then sign again.',
+  notOverridable: 'Nobody may override this stop. Remove its cause.',
+  underBroken: 'The order is not what was signed',
+  underBrokenText:
+    'The dose was recorded under an order whose text, or what is stored beside it, is not what was signed. A veterinarian finds out what was meant.',
   held: 'The order is held. A veterinarian lifts the hold.',
   ended: 'The order has ended.',
   alreadyRecorded: 'This dose is recorded already.',

@@ -2,6 +2,8 @@ import { counted, defineMessages } from './define-messages.ts'
 
 /** Words of treatment orders, on screen and on paper. */
 export const orderWords = defineMessages({
+  stopIfUnreadable:
+    'What the order said about stopping cannot be read any more. Stop at any sign of distress.',
   order: 'Treatment order: bath',
   meaningAuthor: 'author of this order',
   lotOfOther: 'The lot is not one of the product that is ordered. Choose a lot of this product, or none.',
@@ -32,6 +34,8 @@ export type OrderField = keyof typeof orderMissing
 
 /** Why an order is refused, and what to do. */
 export const orderProblemWords = defineMessages({
+  versionGone:
+    'This order was signed, and the signed version is not in the database any more. Do not dose; tell the administrator.',
   veterinariansDraft:
     'This is the draft of a veterinarian. Tell them what should be different, or write a proposal of your own.',
   startYears: (p: { years: number }) =>

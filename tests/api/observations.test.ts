@@ -62,6 +62,30 @@ describe('an observation', () => {
     expect([other.status, other.body.code]).toEqual([409, 'id-already-used'])
   })
 
+  it('keeps the dead of an animal that is elsewhere, and a registrar explains where it was', async () => {
+    const one = await aCase(api)
+    const other = await aCase(api)
+    const deathId = api.nextId()
+    const reply = await send(
+      anObservation(api, other.enclosure.code, {
+        foundDead: 1,
+        deaths: [{ id: deathId, accession: one.animal.accession, count: 1 }],
+      }),
+    )
+    expect([reply.status, reply.body.foundDead, reply.body.unassignedDead]).toEqual([201, 1, 0])
+    const { agent } = await api.as('registrar')
+    const chart = await agent.get(`/api/animals/${one.animal.accession}`).expect(200)
+    expect(chart.body.discrepancies).toMatchObject([
+      {
+        kind: 'died-elsewhere',
+        forRole: 'registrar',
+        facts: { seen: 1, enclosure: other.enclosure.code, place: one.enclosure.code },
+      },
+    ])
+    const there = await agent.get(`/api/animals/${other.animal.accession}`).expect(200)
+    expect(there.body.discrepancies).toEqual([])
+  })
+
   it('posts the dead to the ledger, keeps three where two are held, and opens a discrepancy', async () => {
     const one = await aCase(api, { count: 2, at: '2026-11-25T14:00:00Z' })
     const deathId = api.nextId()

@@ -1,6 +1,18 @@
 import type { DoseRecord } from '../../../shared/domain/orders/dose-states.ts'
 import type { Db } from '../../platform/database/db.ts'
 
+/** An end of a bath as a list gives it. */
+export interface OtherStop {
+  id: string
+  at: string
+  by: string
+  cause: 'time-up' | 'stopped'
+  seen: string | null
+  rescue: string | null
+  recorded_at: string
+  recorded_by: string
+}
+
 export interface DoseReadRow {
   id: string
   order_id: string
@@ -23,6 +35,8 @@ export interface DoseReadRow {
   recorded_by: string
   stop_recorded_at: Date | null
   stop_recorded_by: string | null
+  /** Ends of the same bath besides the one that counts, the latest first. */
+  other_stops: OtherStop[]
   struck_reason: string | null
   struck_at: Date | null
   struck_by: string | null
@@ -38,6 +52,13 @@ export const recordOf = (row: DoseReadRow): DoseRecord => ({
   endedAt: row.stop_at?.toISOString() ?? null,
 })
 
+/** Of several ends of one bath the latest counts until somebody strikes it out: the animals were in it that long. */
+const latestFirst = 'b.happened_at DESC, b.recorded_at DESC'
+const otherStops = `(SELECT coalesce(json_agg(json_build_object('id', b.id, 'at', b.happened_at, 'by', r.printed_name,
+             'cause', b.cause, 'seen', b.seen, 'rescue', b.rescue, 'recorded_at', b.recorded_at, 'recorded_by', b.recorded_by)
+             ORDER BY ${latestFirst}), '[]')
+        FROM live_bath_stops b JOIN people r ON r.id = b.recorded_by WHERE b.dose_id = d.id AND b.id <> s.id)`
+
 /** Every record of an order's doses, over all its versions, in time order, struck-out ones with the reason. */
 export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
   return readDosesOf(db, [orderId])
@@ -50,13 +71,13 @@ export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseRe
             d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,
-            s.recorded_by AS stop_recorded_by, x.reason AS struck_reason, x.recorded_at AS struck_at,
+            s.recorded_by AS stop_recorded_by, ${otherStops} AS other_stops, x.reason AS struck_reason, x.recorded_at AS struck_at,
             y.printed_name AS struck_by
        FROM doses d
        JOIN order_versions v ON v.id = d.order_version_id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN product_lots t ON t.id = d.lot_id
-       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at LIMIT 1) s ON true
+       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
        LEFT JOIN dose_voids x ON x.dose_id = d.id
        LEFT JOIN people y ON y.id = x.recorded_by

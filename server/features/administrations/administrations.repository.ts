@@ -1,5 +1,7 @@
 import { insertOnce } from '../../platform/database/rows.ts'
+import { noteWritten } from '../../platform/database/written-rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
+import { DoseOverrideRow } from './dose-override.entity.ts'
 import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 
 export function insertCalculation(tx: Tx, row: DoseCalculation): Promise<{ created: boolean }> {
@@ -23,6 +25,10 @@ export function findVoid(tx: Tx, of: { doseId: string } | { stopId: string }): P
   return tx.manager.findOneBy(DoseVoidRow, of)
 }
 
+export async function insertOverride(tx: Tx, row: DoseOverrideRow): Promise<void> {
+  await tx.manager.insert(DoseOverrideRow, row)
+}
+
 export async function insertVoid(tx: Tx, row: DoseVoidRow): Promise<void> {
   await tx.manager.insert(DoseVoidRow, row)
 }
@@ -30,6 +36,15 @@ export async function insertVoid(tx: Tx, row: DoseVoidRow): Promise<void> {
 export function insertStop(tx: Tx, row: BathStopRow): Promise<{ created: boolean }> {
   // the time is not compared: of a device whose clock goes ahead it is the server's, and another on every attempt
   return insertOnce(tx, BathStopRow, row, ['doseId', 'cause'])
+}
+
+/** Whether an end of the bath stands already. */
+export async function hasEnded(tx: Tx, doseId: string): Promise<boolean> {
+  const rows: unknown[] = await tx.manager.query(
+    'SELECT 1 FROM live_bath_stops s WHERE s.dose_id = $1 LIMIT 1',
+    [doseId],
+  )
+  return rows.length > 0
 }
 
 /** Notes once that a person was shown the amount; true when it is new. */
@@ -42,6 +57,7 @@ export async function insertSeen(
      VALUES ($1, $2, $3, $4, $5) ON CONFLICT ON CONSTRAINT uq_dose_amounts_seen_person DO NOTHING RETURNING id`,
     [row.id, row.orderVersionId, row.doseKey, row.personId, tx.at],
   )
+  if (rows.length > 0) noteWritten(tx.manager.queryRunner, 'dose_amounts_seen', row.id)
   return rows.length > 0
 }
 

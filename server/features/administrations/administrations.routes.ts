@@ -36,6 +36,11 @@ export function administrationRoutes(
       await service.calculateSecond(context, params.number, params.key, body)
       return queries.sheet(params.number, params.key, true, context)
     }),
+    route(contracts.overrideDoseStop, async ({ params, body, context }) => {
+      await service.overrideDoseStop(context, params.number, params.key, body)
+      // whoever signs it may still be the second person
+      return queries.sheet(params.number, params.key, true, context)
+    }),
     route(contracts.giveDose, async ({ params, body, context }) => {
       await service.giveDose(context, params.number, params.key, body)
       return queries.sheet(params.number, params.key, false, context)

@@ -8,6 +8,7 @@ import { timeByNow, timeNotAhead } from '../../platform/http/check-time.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FactTimes } from '../facility/index.ts'
+import { readOrderNumberOfDose } from './administrations.reads.ts'
 import * as repository from './administrations.repository.ts'
 import { createCalculations } from './calculations.service.ts'
 import {
@@ -19,7 +20,9 @@ import {
   subjectOf,
 } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
+import { createOverrides } from './override.service.ts'
 import { createStrikes } from './strike.service.ts'
+import { tellClocksAnew } from './tell-clocks.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
@@ -27,7 +30,7 @@ import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
 import type { LotNamed } from './lot-of-order.ts'
 import { isAmountNow, obstacles } from './judge-dose.ts'
 import { firstOf, secondOf } from './second-person.ts'
-import { concentrationGiven, exceptionsOf, judgeAmount, marksOfCalculations } from './judge-record.ts'
+import { concentrationGiven, exceptionsOf, judgeAmount, marksOfCalculations, textOf } from './judge-record.ts'
 import type { Exception } from './judge-record.ts'
 
 interface DoseToWrite {
@@ -76,6 +79,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       after: {
         key: situation.planned.key,
         amount: given.amount && { ...given.amount },
+        overrides: situation.overrides.map(({ id }) => id),
         happenedAt: given.happenedAt.toISOString(),
         exceptions: exceptions.map((exception) => exception.code),
       },
@@ -102,7 +106,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
     const facts = { dose: given.id, order: content.number, key: planned.key }
     const here = treated.filter(({ isHere }) => isHere !== false)
     const open = (
-      kind: 'dose-amount-differs' | 'dosed-in-absence' | 'dose-of-other-product',
+      kind: 'dose-amount-differs' | 'dosed-in-absence' | 'dose-of-other-product' | 'dose-under-broken-order',
       animals: readonly { animalId: string }[],
       more: Record<string, string>,
     ) =>
@@ -118,7 +122,9 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       const { lotNumber, productName } = given.lot
       await open('dose-of-other-product', affected, { lot: lotNumber, product: productName })
     }
-    const amount = given.amount && judgeAmount(situation, given.amount)
+    if (situation.block.state === 'broken')
+      await open('dose-under-broken-order', affected, { given: given.amount ? textOf(given.amount) : '' })
+    const amount = situation.readable && given.amount && judgeAmount(situation, given.amount)
     if (amount && !amount.fits) {
       const { given: what, signed, workedOut } = amount
       await open('dose-amount-differs', affected, { given: what, signed, workedOut })
@@ -129,6 +135,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
   return {
     ...createCalculations(parts),
     ...createStrikes(parts),
+    ...createOverrides(parts),
 
     /** Gives a dose: everything is judged again in this transaction, and anything in the way refuses it. */
     async giveDose(
@@ -174,11 +181,6 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       given: BodyOf<typeof contracts.recordDose>,
     ): Promise<void> {
       const happenedAt = timeNotAhead(given.happenedAt, parts.clock.now())
-      if (given.kind === 'recorded' && given.amount === null)
-        throw new Problem('bad-input', {
-          detail: 'Type how much was given.',
-          errors: [{ pointer: '/amount', detail: 'Type how much was given.' }],
-        })
       const amount = given.amount === null ? null : amountEntered(given.amount, '/amount')
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, {
@@ -212,6 +214,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const dose = await repository.findDose(tx, doseId)
         const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
         if (!dose || !orderId) throw new Problem('not-found')
+        const isFirst = !(await repository.hasEnded(tx, doseId))
         const { created } = await repository.insertStop(tx, {
           id: given.id,
           doseId,
@@ -230,7 +233,10 @@ export function createAdministrationsService(parts: AdministrationsParts) {
             after: { cause: given.cause, seen: given.seen, rescue: given.rescue },
             clinical: true,
           })
-        await parts.orders.course.settle(tx, orderId)
+        const named = created && !isFirst && (await readOrderNumberOfDose(tx.manager, doseId))
+        if (named)
+          await tellClocksAnew(parts, tx, { id: orderId, number: named.number }, doseWords.anotherEnd)
+        else await parts.orders.course.settle(tx, orderId)
       })
     },
   }

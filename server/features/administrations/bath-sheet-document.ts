@@ -103,7 +103,11 @@ function conditionsBlock({ sheet }: BathPaper): DocumentBlock {
     columns: 2,
     items: sheet.steps.map((step) => [
       { text: step.text },
-      { text: states[step.state], bold: step.state !== 'met', tone: 'second' },
+      {
+        text: `${states[step.state]}${step.overridden ? bathPaper.overridden : ''}`,
+        bold: step.state !== 'met',
+        tone: 'second',
+      },
     ]),
   }
 }
@@ -228,6 +232,26 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
             : {}),
         })),
       ),
+      ...listed(
+        bathPaper.overrides,
+        sheet.overrides.map(({ title, text, reason, signature }) => ({
+          kind: 'caution',
+          level: 'stop',
+          title,
+          lines: [text],
+          override: [
+            {
+              text: bathPaper.overriddenBy({
+                name: signature.printedName,
+                licence: signature.licence?.number ?? '',
+                at: sayInstant(signature.signedAt, signature.zone),
+              }),
+              bold: true,
+            },
+            { text: orderPaper.reason({ reason }) },
+          ],
+        })),
+      ),
       // a page of its own, without the amount, that can be handed to the second person
       { kind: 'page-break' },
       {
@@ -263,7 +287,13 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           },
         ],
       },
-      { kind: 'signatures', entries: [signatureEntry(block)] },
+      {
+        kind: 'signatures',
+        entries: [
+          signatureEntry(block),
+          ...sheet.overrides.map(({ signature }) => signatureEntry(signature)),
+        ],
+      },
       { kind: 'fingerprint', label: bathPaper.fingerprint, fingerprint: block.hash },
       standingCaution(),
     ],

@@ -101,6 +101,7 @@ export function createCalculations(parts: AdministrationsParts) {
       const strength = strengthEntered(given.strengthRead, '/strengthRead')
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at })
+        refuseBroken(situation)
         const calculations = await parts.calculations(situation.versionId, key, tx)
         // sent again: the answer is the one of the first time
         if (calculations.all.some((one) => one.id === given.id && one.part === 'second')) return

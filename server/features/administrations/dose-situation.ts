@@ -12,18 +12,23 @@ import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { known } from '../../../shared/domain/cautions/fact.ts'
-import { doseWords } from '../../../shared/messages/doses.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Animals } from '../animals/index.ts'
 import { placeReads } from '../enclosures/index.ts'
+import { countText } from '../orders/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
+import type { SigningService } from '../signing/index.ts'
 import { readDoses, stands } from './administrations.reads.ts'
 import type { DoseReadRow } from './administrations.reads.ts'
+import { readSignedOverrides } from './signed-overrides.ts'
+import type { SignedOverride } from './signed-overrides.ts'
 
 export interface DoseSituation {
   row: OrderRow
   versionId: string
+  /** False where the signed text cannot be read: `content` is then what the columns tell, and nothing is worked out. */
+  readable: boolean
   content: SignedOrder
   block: SignatureBlock
   planned: PlannedDose
@@ -41,6 +46,14 @@ export interface DoseSituation {
   /** The order worked out again by the facts of the instant; null where the water cannot be read any more. */
   judgement: OrderJudgement | null
   answer: CautionAnswer | null
+  /** What the answer was judged by; null where nothing could be. */
+  facts: CautionFacts | null
+  /** The lot it was judged for: the one in the hand, or the one of the order. */
+  lotId: string | null
+  /** The instant it was judged for. */
+  at: string
+  /** Stops at this dose that a veterinarian overrode, each checked now. */
+  overrides: SignedOverride[]
   drift: Drift | null
   /** What is on file of how high the water stands. */
   marks: MarksOnFile
@@ -61,6 +74,7 @@ export interface DoseSituationParts {
   orders: Orders
   queries: OrderQueries
   animals: Animals
+  signing: SigningService
 }
 
 /** What is known of an order's earlier doses goes into the facts of its spacing. */
@@ -104,6 +118,26 @@ async function readFillMark(db: Db, enclosureId: string): Promise<MarksOnFile['f
   return { mark: row.fill_mark ?? '', volume }
 }
 
+/** The stand-in of an unreadable order with the animals that its columns name. */
+async function standIn(
+  { animals, dataSource }: DoseSituationParts,
+  order: SignedOrder,
+  at: Date,
+  db: Db = dataSource,
+): Promise<SignedOrder> {
+  const named = await animals.questions.animalsById(order.fields.animalIds, at, db)
+  const said = named.map((animal) => ({
+    animalId: animal.animalId,
+    accession: animal.accession,
+    commonName: animal.commonName,
+    scientificName: animal.scientificName,
+    countText: countText(animal),
+    enclosureCode: animal.enclosureCode ?? '',
+    treated: true,
+  }))
+  return { ...order, water: { ...order.water, animals: said } }
+}
+
 /** The animals that the signature names, and whether they are among those in the water. */
 function treatedOf({ water }: SignedOrder, here: readonly string[] | null): DoseSituation['treated'] {
   return water.animals
@@ -140,8 +174,8 @@ export async function readDoseSituation(
   options: { lotId?: string | null; db?: Db } = {},
 ): Promise<DoseSituation> {
   const sealed = await parts.queries.sealed(number, undefined)
-  if (!sealed.content) throw new Problem('broken-record', { detail: doseWords.unreadable })
-  const { content } = sealed
+  const readable = sealed.content !== null
+  const content = sealed.content ?? (await standIn(parts, sealed.standIn, at, options.db))
   const { fields } = content
   const plan = planOf(fields, sealed.block)
   const planned = plan.find((dose) => dose.key === key)
@@ -149,11 +183,14 @@ export async function readDoseSituation(
   const db = options.db ?? parts.dataSource
   const all = await readDoses(db, sealed.row.id)
   const records = all.filter(stands)
-  const found = await parts.orders.judge({ ...fields, lotId: options.lotId ?? fields.lotId }, at, {
-    db,
-    exceptOrderId: sealed.row.id,
-    stage: 'start',
-  })
+  const lotId = options.lotId ?? fields.lotId
+  const found = readable
+    ? await parts.orders.judge({ ...fields, lotId }, at, {
+        db,
+        exceptOrderId: sealed.row.id,
+        stage: 'start',
+      })
+    : null
   const judgement = found?.judgement ?? null
   const facts = judgement && withSpacing(judgement.facts, content, records)
   const volumeNow = found?.situation.water.volume?.netVolumeLitres ?? null
@@ -164,6 +201,7 @@ export async function readDoseSituation(
   return {
     row: sealed.row,
     versionId: sealed.versionId,
+    readable,
     content,
     block: sealed.block,
     planned,
@@ -174,6 +212,10 @@ export async function readDoseSituation(
     struck: all.filter((one) => !stands(one)),
     product: found?.product ?? null,
     judgement,
+    facts,
+    lotId,
+    at: at.toISOString(),
+    overrides: await readSignedOverrides(db, parts.signing, { orderVersionId: sealed.versionId, key }),
     answer:
       facts &&
       evaluateCautions({

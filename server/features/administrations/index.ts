@@ -7,11 +7,13 @@ import type { Animals } from '../animals/index.ts'
 import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { OpenOrder, Orders } from '../orders/index.ts'
+import type { SigningService } from '../signing/index.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
 import { readCalculations, readOrderNumberOfDose, readSeenBy } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
+import { DoseOverrideRow } from './dose-override.entity.ts'
 import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
@@ -21,7 +23,8 @@ import type { Calculations } from './second-person.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
-export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow, DoseVoidRow]
+export { verifyOverrides } from './signed-overrides.ts'
+export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow, DoseVoidRow, DoseOverrideRow]
 
 async function calculationsOf(db: Db, versionId: string, key: string): Promise<Calculations> {
   const all = await readCalculations(db, versionId, key)
@@ -35,10 +38,11 @@ export function createAdministrations(
     animals: Animals
     documents: Documents
     pdf: PdfPool
+    signing: SigningService
   },
 ) {
-  const { dataSource, orders, animals, clock } = parts
-  const outside = { dataSource, orders, animals, queries: orders.queries }
+  const { dataSource, orders, animals, clock, signing } = parts
+  const outside = { dataSource, orders, animals, signing, queries: orders.queries }
   const service = createAdministrationsService({
     ...parts,
     ...outside,

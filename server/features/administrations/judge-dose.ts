@@ -3,6 +3,7 @@ import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cauti
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { overrideStands } from '../../../shared/domain/orders/dose-override.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
@@ -13,6 +14,7 @@ import type { SignedOrder } from '../orders/index.ts'
 import type { CalculationReadRow } from './administrations.reads.ts'
 import { firstOf, secondOf, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
+import { findingOf } from './signed-overrides.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 
@@ -60,6 +62,32 @@ export function overrideFor(content: SignedOrder, caution: Caution): SignedOrder
     : null
 }
 
+/** The override that a veterinarian signed at this dose, for this finding on the facts and the lot as they are. */
+function overrideAtDose({ facts, lotId, at, overrides }: DoseSituation, caution: Caution) {
+  if (caution.level !== 'stop' || !caution.overridable || !facts) return null
+  const { finding } = findingOf(caution, facts, lotId)
+  const own = overrides.find(
+    ({ content, block }) =>
+      content !== null &&
+      overrideStands(
+        { finding: content.finding, signedAt: block.signedAt, isIntact: block.state === 'intact' },
+        finding,
+        at,
+      ),
+  )
+  return own?.content ? { by: own.block.printedName, reason: own.content.reason } : null
+}
+
+/** Who answered a stop with a signed reason, with the order or at this dose; null while it is open. */
+export function answeredStop(
+  situation: DoseSituation,
+  caution: Caution,
+): { by: string; reason: string } | null {
+  const { content, block } = situation
+  const signed = overrideFor(content, caution)
+  return signed ? { by: block.printedName, reason: signed.reason } : overrideAtDose(situation, caution)
+}
+
 /** An earlier bath of the order that nobody has ended: the animals would be in two doses at once. */
 function runningBath({ content, records, planned }: DoseSituation) {
   if (content.fields.contactMinutes === null) return undefined
@@ -81,6 +109,7 @@ function amountMoved({ content, judgement }: DoseSituation): boolean {
 /** Everything that stands in the way of giving the dose now, in words. */
 export function obstacles(situation: DoseSituation, calculations: Calculations): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
+  if (!situation.readable) return [doseWords.unreadable]
   const why: string[] = []
   if (block.state !== 'intact') why.push(doseWords.notIntact)
   if (row.phase === 'held') why.push(doseWords.held)
@@ -119,7 +148,7 @@ export function obstacles(situation: DoseSituation, calculations: Calculations):
     )
   const zone = judgement?.facts.zone ?? 'UTC'
   for (const caution of answer?.cautions ?? [])
-    if (caution.level === 'stop' && !overrideFor(content, caution))
+    if (caution.level === 'stop' && !answeredStop(situation, caution))
       why.push(`${sayCaution(caution, zone).title}. ${sayCaution(caution, zone).text}`)
   if (needsSecond(situation)) {
     const first = firstOf(calculations)

@@ -21,7 +21,7 @@ export interface Exception {
   resolve: string[]
 }
 
-const textOf = ({ value, unit }: Quantity) => formatDose(value, unit).text
+export const textOf = ({ value, unit }: Quantity) => formatDose(value, unit).text
 
 /** What should have gone in: worked out for the water of that time, or as signed where that cannot be done. */
 function expectedOf({ judgement, content }: DoseSituation): Quantity | null {
@@ -104,7 +104,8 @@ export function exceptionsOf(
   const found: Exception[] = []
   const mark = (code: string, level: Exception['level'], title: string, text: string) =>
     found.push({ ruleId: 'record', code, level, title, text, resolve: [] })
-  const amount = given.amount && judgeAmount(situation, given.amount)
+  // with what nobody can read, no amount can be compared
+  const amount = situation.readable && given.amount && judgeAmount(situation, given.amount)
   if (amount && !amount.fits)
     mark(
       'amount-differs',
@@ -130,7 +131,7 @@ export function exceptionsOf(
   if (given.happenedAt < new Date(block.signedAt))
     mark('signed-after', 'warning', doseWords.signedAfter, doseWords.signedAfterText)
   if (row.phase === 'held') mark('while-held', 'warning', doseWords.whileHeld, doseWords.whileHeldText)
-  if (block.state !== 'intact') mark('not-intact', 'warning', doseWords.notIntact, doseWords.notIntact)
+  if (block.state !== 'intact') mark('not-intact', 'stop', doseWords.underBroken, doseWords.underBrokenText)
   // what went in, and for whom, stands before what would have been asked for
   const rules = judgement ? listExceptions(judgement.facts).map((caution) => saidForSheet(caution, zone)) : []
   return [...found, ...rules]

@@ -8,7 +8,6 @@ import type { Action } from '../../../shared/domain/permissions/table.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { formatExpression } from '../../../shared/domain/quantities/format-expression.ts'
 import { formatWorkingValue } from '../../../shared/domain/quantities/format-working-value.ts'
-import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
@@ -20,79 +19,25 @@ import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts
 import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
-import { needsSecond, obstacles, overrideFor } from './judge-dose.ts'
+import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
+import { presentRecord, storedText } from './present-record.ts'
 import { firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
+import { findingOf } from './signed-overrides.ts'
 
 type SheetCaution = RecordedDose['exceptions'][number]
-const mayBe: Action[] = ['dose.give', 'dose.record', 'dose.calculate-second', 'bath.stop', 'order.hold']
+const mayBe: Action[] = [
+  'dose.give',
+  'dose.record',
+  'dose.calculate-second',
+  'bath.stop',
+  'order.hold',
+  'caution.override',
+]
 
 export const saidForSheet = (caution: Caution, zone: string): SheetCaution => {
   const { title, text, resolves } = sayCaution(caution, zone)
   return { ruleId: caution.ruleId, code: caution.code, level: caution.level, title, text, resolve: resolves }
-}
-
-const textOf = (value: string | null, unit: string | null) =>
-  value === null || unit === null ? null : formatDose(value, unit as UnitCode).text
-
-/** Whether this person may strike a record out now: a slip of the hand on its day, or as a veterinarian. */
-function mayStrike(row: { recordedAt: Date; recordedBy: string }, { now, actor, zone }: Reader): boolean {
-  const dayOf = (at: string) => facilityDateOf(at, zone)
-  const isOwn = row.recordedBy === actor.personId && dayOf(row.recordedAt.toISOString()) === dayOf(now)
-  return decide('dose.strike', actor.roles, { 'own-record-of-the-day': isOwn }).allowed
-}
-
-interface Reader {
-  actor: Actor
-  zone: string
-  now: string
-}
-
-export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
-  const happened = (one: DoseReadRow) => one.kind === 'given' || one.kind === 'recorded'
-  return {
-    id: row.id,
-    key: row.dose_key,
-    kind: row.kind,
-    amountText: textOf(row.amount_entered_value, row.amount_entered_unit),
-    lotNumber: row.lot_number,
-    happenedAt: row.happened_at.toISOString(),
-    recordedAt: row.recorded_at.toISOString(),
-    by: row.by_name,
-    note: row.note,
-    exceptions: JSON.parse(row.exceptions_text) as RecordedDose['exceptions'],
-    struck:
-      (row.struck_reason !== null &&
-        row.struck_at && {
-          reason: row.struck_reason,
-          at: row.struck_at.toISOString(),
-          by: row.struck_by ?? '',
-        }) ||
-      null,
-    mayStrike:
-      row.struck_reason === null &&
-      mayStrike({ recordedAt: row.recorded_at, recordedBy: row.recorded_by }, reader),
-    twice:
-      row.struck_reason === null &&
-      happened(row) &&
-      all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && happened(one)),
-    stop: row.stop_at &&
-      row.stop_cause && {
-        id: row.stop_id ?? '',
-        at: row.stop_at.toISOString(),
-        beforeStart: row.stop_at < row.happened_at,
-        mayStrike:
-          row.struck_reason === null &&
-          mayStrike(
-            { recordedAt: row.stop_recorded_at ?? row.recorded_at, recordedBy: row.stop_recorded_by ?? '' },
-            reader,
-          ),
-        by: row.stop_by ?? '',
-        cause: row.stop_cause,
-        seen: row.stop_seen,
-        rescue: row.stop_rescue,
-      },
-  }
 }
 
 const isMine = (row: CalculationReadRow, actor: Actor) => row.recorded_by === actor.personId
@@ -103,7 +48,7 @@ function presentFirst(row: CalculationReadRow | undefined, hide: boolean, actor:
     by: row.by_name,
     at: row.recorded_at.toISOString(),
     lotNumber: hide ? null : row.lot_number,
-    amountText: hide ? null : textOf(row.amount_entered_value, row.amount_entered_unit),
+    amountText: hide ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
     mine: isMine(row, actor),
   }
 }
@@ -121,7 +66,7 @@ function presentSecond(
     by: second.by_name,
     at: second.recorded_at.toISOString(),
     lotNumber: hide && !mine ? null : second.lot_read,
-    amountText: hide && !mine ? null : textOf(second.amount_entered_value, second.amount_entered_unit),
+    amountText: hide && !mine ? null : storedText(second.amount_entered_value, second.amount_entered_unit),
     mine,
     agrees: second.agrees ?? false,
     alone: isByTheSame(first, second),
@@ -195,7 +140,8 @@ function presentSteps(
   calculations: Calculations,
   zone: string,
 ): BathSheet['steps'] {
-  const fired = new Map((situation.answer?.cautions ?? []).map((one) => [one.ruleId as string, one]))
+  const found = situation.answer?.cautions ?? []
+  const fired = new Map(found.map((one) => [one.ruleId as string, one]))
   const agreed = secondStands(calculations)
   return situation.content.conditions.map((condition) => {
     const caution = fired.get(condition.ruleId)
@@ -209,8 +155,19 @@ function presentSteps(
         help: null,
         resolve: [],
         place: 'second-calculation' as const,
+        overridden: false,
       }
-    if (!caution) return { ruleId, level, text, state: 'met' as const, help: null, resolve: [], place: null }
+    if (!caution)
+      return {
+        ruleId,
+        level,
+        text,
+        state: 'met' as const,
+        help: null,
+        resolve: [],
+        place: null,
+        overridden: false,
+      }
     const said = sayCaution(caution, zone)
     return {
       ruleId,
@@ -219,11 +176,19 @@ function presentSteps(
       state: caution.unknownFacts.length > 0 ? ('unknown' as const) : ('unmet' as const),
       help: said.text,
       resolve: said.resolves,
+      overridden: isAnswered(
+        situation,
+        found.filter((one) => one.ruleId === condition.ruleId && one.level === 'stop'),
+      ),
       place:
         caution.resolvedBy.map((code) => placesToResolve[code]).find((place) => place !== undefined) ?? null,
     }
   })
 }
+
+/** Whether every one of some stops was answered with a signed reason. */
+const isAnswered = (situation: DoseSituation, stops: readonly Caution[]) =>
+  stops.length > 0 && stops.every((one) => answeredStop(situation, one) !== null)
 
 /** Where in the application somebody resolves what a caution asks for; the rest is done at the tank or by the vet. */
 const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['place']>> = {
@@ -251,14 +216,31 @@ const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['p
   'calculate-again-by-another': 'second-calculation',
 }
 
-/** Who overrode a stop at the signature and why; null while it is open. */
-function presentOverride(
-  { content, block }: DoseSituation,
+/** A caution with who overrode it, and what an override of it would have to name. */
+function presentCaution(
+  situation: DoseSituation,
   caution: Caution,
-): BathSheet['cautions'][number]['overridden'] {
-  const override = overrideFor(content, caution)
-  return override && { by: block.printedName, reason: override.reason }
+  zone: string,
+): BathSheet['cautions'][number] {
+  const { facts, lotId } = situation
+  const overridden = answeredStop(situation, caution)
+  const isOpen = caution.level === 'stop' && caution.overridable && overridden === null
+  return {
+    ...saidForSheet(caution, zone),
+    overridden,
+    finding: isOpen && facts ? findingOf(caution, facts, lotId).finding : null,
+  }
 }
+
+/** Every override that was signed at this dose, as it is signed and checked. */
+const presentOverrides = ({ overrides }: DoseSituation): BathSheet['overrides'] =>
+  overrides.map(({ id, content, block }) => ({
+    id,
+    title: content?.title ?? doseWords.overrideUnreadable,
+    text: content?.text ?? '',
+    reason: content?.reason ?? '',
+    signature: block,
+  }))
 
 /** What a sheet is made from, the moment it is made for, and for whom. */
 export interface SheetRequest {
@@ -310,12 +292,12 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
       expiresOn,
     })),
     lotId: hideLot ? null : (first?.lot_id ?? fields.lotId),
-    targetText: `${content.targetText} ${content.basisText}`,
+    targetText: `${content.targetText} ${content.basisText}`.trim(),
     contactMinutes: course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,
-    signedAmountText: hide ? null : content.amount.text,
+    signedAmountText: hide || !situation.readable ? null : content.amount.text,
     amountNowText: hide || !dose?.measured ? null : formatDose(dose.measured.value, dose.measured.unit).text,
     amountNow: hide || !dose?.measured ? null : { value: dose.measured.value, unit: dose.measured.unit },
     working: hide
@@ -329,11 +311,9 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     driftWithin: drift?.within ?? false,
     cautions: [
       ...leftTheWater(situation),
-      ...(answer?.cautions ?? []).map((caution) => ({
-        ...saidForSheet(caution, zone),
-        overridden: presentOverride(situation, caution),
-      })),
+      ...(answer?.cautions ?? []).map((caution) => presentCaution(situation, caution, zone)),
     ],
+    overrides: presentOverrides(situation),
     steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
     first: presentFirst(first, hide, actor),
@@ -373,6 +353,7 @@ function leftTheWater(situation: DoseSituation): BathSheet['cautions'] {
       text: doseWords.animalsLeftText({ animals: names.join('; ') }),
       resolve: [],
       overridden: null,
+      finding: null,
     },
   ]
 }

@@ -1,6 +1,8 @@
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions } from '../../platform/database/transactions.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import { drawable } from '../../platform/pdf/drawable.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
@@ -32,6 +34,7 @@ export function createSheetPrinter(parts: SheetPrintParts) {
     const printedAt = parts.clock.now().toISOString()
     const { situation, sheet } = await parts.sheetFor(context, number, key, false)
     const { block, row, content } = situation
+    if (!situation.readable) throw new Problem('broken-record', { detail: doseWords.unreadable })
     const model = bathSheetDocument({
       sheet: drawable(sheet),
       content: drawable(content),

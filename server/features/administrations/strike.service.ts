@@ -4,30 +4,15 @@ import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import { checkMayStrike } from '../animals/index.ts'
-import { readDoses, readOrderNumberOfDose, stands } from './administrations.reads.ts'
+import { readOrderNumberOfDose } from './administrations.reads.ts'
 import * as repository from './administrations.repository.ts'
 import { personOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import type { DoseRow } from './dose.entity.ts'
-import { readDoseSituation } from './dose-situation.ts'
-
-const wentIn = ({ kind }: { kind: string }) => kind === 'given' || kind === 'recorded'
+import { tellClocksAnew } from './tell-clocks.ts'
 
 /** Striking out what was recorded by mistake: the record stays with its reason, and nothing rests on it any more. */
 export function createStrikes(parts: AdministrationsParts) {
-  /** Clocks of quarantine rest on the doses: what they were told is voided, and told anew by the records that stand. */
-  async function tellClocksAnew(tx: Tx, orderId: string, number: string, reason: string): Promise<void> {
-    await parts.orders.course.takenBack(tx, { orderId, reason })
-    const standing = (await readDoses(tx.manager, orderId)).filter(stands).filter(wentIn)
-    for (const record of standing) {
-      const { enclosureIds } = await readDoseSituation(parts, number, record.dose_key, record.happened_at, {
-        db: tx.manager,
-      })
-      await parts.orders.course.doseWentIn(tx, { orderId, enclosureIds, at: record.happened_at })
-    }
-    await parts.orders.course.settle(tx, orderId)
-  }
-
   async function locked(tx: Tx, doseId: string): Promise<{ dose: DoseRow; orderId: string; number: string }> {
     const dose = await repository.findDose(tx, doseId)
     const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
@@ -74,7 +59,7 @@ export function createStrikes(parts: AdministrationsParts) {
           clinical: true,
         })
         if (!stop) await parts.animals.service.settleForDose(tx, id, reason)
-        await tellClocksAnew(tx, orderId, number, reason)
+        await tellClocksAnew(parts, tx, { id: orderId, number }, reason)
         return dose.id
       })
     },

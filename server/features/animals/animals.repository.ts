@@ -122,12 +122,13 @@ export interface EnclosureRow {
   code: string
   boundary: string | null
   in_use_until: Date | null
+  treatment_vessel: boolean
 }
 
 /** Enclosures as far as moves are judged by them. */
 export async function findEnclosures(tx: Tx, ids: readonly string[]): Promise<Map<string, EnclosureRow>> {
   const rows: EnclosureRow[] = await tx.manager.query(
-    `SELECT e.id, e.code, e.boundary, e.in_use_until FROM enclosures e WHERE e.id = ANY ($1)`,
+    `SELECT e.id, e.code, e.boundary, e.in_use_until, e.treatment_vessel FROM enclosures e WHERE e.id = ANY ($1)`,
     [ids],
   )
   return new Map(rows.map((row) => [row.id, row]))

@@ -7,6 +7,7 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { FactTimes } from '../facility/index.ts'
 import type { Animal } from './animal.entity.ts'
 import { CountEntryRow, CountStatementRow, DeathRow } from './animal-ledgers.entity.ts'
+import { findEnclosures } from './animals.repository.ts'
 import * as repository from './ledgers.repository.ts'
 import { subjectOf } from './moves.service.ts'
 import type { MoveParts, Moves } from './moves.service.ts'
@@ -76,6 +77,10 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
     })
   }
 
+  /** Code of an enclosure; empty outside the house. */
+  const codeOf = async (tx: Tx, enclosureId: string | null) =>
+    enclosureId === null ? '' : ((await findEnclosures(tx, [enclosureId])).get(enclosureId)?.code ?? '')
+
   async function postDeaths(tx: Tx, accession: string, given: DeathsRequest): Promise<void> {
     const animal = await moves.lockByAccession(tx, accession)
     const times = await facility.timesOf(tx, given.happenedAt)
@@ -90,9 +95,12 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
       happenedAt: times.happenedAt,
     }
     if (await isRepeated(tx, DeathRow, content)) return
-    if (given.enclosureId !== undefined)
-      await moves.findTarget(tx, given.enclosureId, new Date(0), '/enclosureId')
-    const enclosureId = given.enclosureId ?? (await ledgers.placeAt(tx, animal.id, times.happenedAt))
+    const found =
+      given.enclosureId === undefined
+        ? null
+        : await moves.findTarget(tx, given.enclosureId, new Date(0), '/enclosureId')
+    const placeId = await ledgers.placeAt(tx, animal.id, times.happenedAt)
+    const enclosureId = found?.id ?? placeId
     const kind = given.kind === 'euthanised' ? 'euthanasia' : 'death'
     const posted = await ledgers.post(
       tx,
@@ -118,6 +126,16 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
       },
     })
     const source = { kind: 'death', id: given.id }
+    // into a treatment vessel animals are brought for a bath, and keep their home
+    const isElsewhere = found && found.id !== placeId && !found.treatment_vessel
+    // of more than there were, it is said already that the last had gone
+    if (isElsewhere && (placeId !== null || posted.excessCount === 0))
+      await ledgers.openDiscrepancy(tx, animal, {
+        kind: 'died-elsewhere',
+        source,
+        facts: { seen: given.count, enclosure: found.code, place: await codeOf(tx, placeId) },
+        times,
+      })
     if (posted.excessCount > 0)
       await ledgers.openDiscrepancy(tx, animal, {
         kind: 'more-than-counted',

@@ -37,7 +37,7 @@ export function readAgentUses(
             coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.happened_at <= $2), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
-                               (SELECT min(s.happened_at) FROM live_bath_stops s
+                               (SELECT max(s.happened_at) FROM live_bath_stops s
                                  WHERE s.dose_id = d.id AND s.happened_at <= $2)))
                         FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2), '[]') AS given,

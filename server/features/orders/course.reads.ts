@@ -24,7 +24,7 @@ export async function readCourse(db: Db, orderId: string): Promise<CourseReadRow
             coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
-                               (SELECT min(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id)))
+                               (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id)))
                         FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')), '[]') AS given
        FROM orders o

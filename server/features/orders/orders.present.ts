@@ -5,9 +5,11 @@ import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { differingCopies } from './compare-copies.ts'
+import { isOrderText } from './is-order-text.ts'
 import type { ReadText } from './compare-copies.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { OrderReadRow } from './orders.reads.ts'
+import { missingLinks } from './signing-chain.ts'
 
 /** What is made of a row only once: a list asks each of its rows several things, and some cost much. */
 function oncePerRow<T>(make: (row: OrderReadRow) => T): (row: OrderReadRow) => T {
@@ -23,7 +25,9 @@ function oncePerRow<T>(make: (row: OrderReadRow) => T): (row: OrderReadRow) => T
 export function readText(text: string | null): ReadText | null {
   try {
     const read: unknown = text === null ? null : JSON.parse(text)
-    return typeof read === 'object' ? (read as ReadText | null) : null
+    if (typeof read !== 'object' || read === null) return null
+    const { content, ...rest } = read as ReadText
+    return isOrderText(content) ? { content, ...rest } : rest
   } catch {
     return null
   }
@@ -31,8 +35,12 @@ export function readText(text: string | null): ReadText | null {
 
 const signedText = oncePerRow((row): ReadText | null => readText(row.signed_text))
 
-/** Whether the version in force can be read and its columns say what was signed; null while none is signed. */
+/**
+ * Whether every signature is there with its version, the one in force can be read and its columns say what was signed;
+ * null while none was signed.
+ */
 const recordOf = oncePerRow((row): OrderRow['record'] => {
+  if (missingLinks(row.chain).length > 0) return 'broken'
   if (row.copies === null) return null
   return differingCopies({ ...row.copies, order: row }, signedText(row)).length === 0 ? 'intact' : 'broken'
 })
@@ -77,6 +85,7 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
       : null,
     held: row.held,
     ended: row.ended,
+    running: row.running,
   }
 }
 

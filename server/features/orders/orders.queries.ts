@@ -4,6 +4,7 @@ import type { SignatureBlock } from '../../../shared/contracts/signing.contract.
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
 import type { listOrders } from '../../../shared/contracts/orders.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { orderProblemWords } from '../../../shared/messages/orders.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
@@ -12,10 +13,13 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
 import { openOrders } from './order-work.ts'
+import { isOrderText } from './is-order-text.ts'
+import { standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
 import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
-import type { VersionReadRow } from './orders.reads.ts'
+import type { OrderReadRow, VersionReadRow } from './orders.reads.ts'
+import { missingLinks } from './signing-chain.ts'
 
 export interface OrderQueriesParts {
   dataSource: Db
@@ -57,12 +61,17 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     return row
   }
 
-  /** A signed version checked now: its text against the signature, and the columns beside it against the text. */
-  async function readVersion(order: { id: string; number: string }, version: VersionReadRow) {
-    const { content, block, text } = await parts.signing.readSealed(version.signed_text_id)
+  /**
+   * A signed version checked now: its text against the signature, the columns beside it against the text, and that no
+   * signature of the order is missing.
+   */
+  async function readVersion(order: OrderReadRow, version: VersionReadRow) {
+    const { content, block, text } = await parts.signing.readSealed(version.signed_text_id, order.created_at)
     const differ = differingCopies({ ...version.copies, order }, readText(text))
-    const state = block.state === 'intact' && differ.length > 0 ? 'broken' : block.state
-    return { content: content as unknown as SignedOrder | null, block: { ...block, state } }
+    const isWhole = differ.length === 0 && missingLinks(order.chain).length === 0
+    const state = block.state === 'intact' && !isWhole ? 'broken' : block.state
+    const read = isOrderText(content) ? content : null
+    return { content: read, block: { ...block, state: read || state === 'unknown-key' ? state : 'broken' } }
   }
 
   return {
@@ -153,6 +162,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const row = await rowOf(number)
       const versions = await readVersions(parts.dataSource, row.id)
       const wanted = versions.find((version) => versionNo === undefined || version.version_no === versionNo)
+      if (!wanted && missingLinks(row.chain).length > 0)
+        throw new Problem('broken-record', { detail: orderProblemWords.versionGone })
       if (!wanted) throw new Problem('not-found', { detail: 'This order has no such signed version.' })
       const { content, block } = await readVersion(row, wanted)
       return {
@@ -162,6 +173,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         versionNo: wanted.version_no,
         superseded: wanted !== versions[0],
         content,
+        /** What the columns tell of a version whose text cannot be read. */
+        standIn: standInOrder(row, wanted.copies),
         block,
       }
     },

@@ -10,6 +10,8 @@
  * - `count-differs`       a count made differs from the ledger
  * - `dose-amount-differs` another amount went into its water than was signed and worked out
  * - `dose-of-other-product` a lot of another product was recorded than the one ordered
+ * - `died-elsewhere`      found dead in an enclosure in which it was not by its moves
+ * - `dose-under-broken-order` a dose was recorded under an order that is no longer what was signed
  * - `dosed-in-absence`    a dose was recorded for it at a time at which it was not in that water
  */
 export const discrepancyKinds = {
@@ -23,6 +25,8 @@ export const discrepancyKinds = {
   'dose-amount-differs': 'veterinarian',
   'dose-of-other-product': 'veterinarian',
   'dosed-in-absence': 'veterinarian',
+  'dose-under-broken-order': 'veterinarian',
+  'died-elsewhere': 'registrar',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
 
 /** Moves against a rule: until they are explained, the animal moves no further unasked. */

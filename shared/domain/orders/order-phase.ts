@@ -11,6 +11,8 @@ export interface OrderStanding {
   signed: { planned: readonly PlannedDose[]; doneKeys: readonly string[]; lastWindowUntil: Instant } | null
   held: boolean
   ended: boolean
+  /** A timed bath of it goes on: it went in and has no end. */
+  running: boolean
 }
 
 /**
@@ -26,6 +28,8 @@ export function orderPhase(standing: OrderStanding, now: Instant): OrderPhase {
   if (!signed) return standing.stage === 'proposed' ? 'proposed' : 'draft'
   if (signed.planned.every((dose) => signed.doneKeys.includes(dose.key))) return 'completed'
   if (standing.held) return 'held'
+  // whoever looks sees first that animals are in a bath, however late it is for the doses that are left
+  if (standing.running) return 'in-progress'
   if (compareInstants(now, signed.lastWindowUntil) > 0) return 'expired'
   return signed.doneKeys.length > 0 ? 'in-progress' : 'not-started'
 }

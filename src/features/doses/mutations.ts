@@ -44,6 +44,16 @@ export const useStopBath = () =>
     body,
   }))
 
+export const useOverrideStop = (params: DoseAddress) =>
+  useTankAct(
+    doses.overrideDoseStop,
+    ({ commandKey, ...body }: BodyOf<typeof doses.overrideDoseStop> & { commandKey: string }) => ({
+      params,
+      body,
+      key: commandKey,
+    }),
+  )
+
 export const useStrikeRecord = () =>
   useTankAct(
     doses.strikeDoseRecord,

@@ -36,7 +36,7 @@ const aMinuteMs = 60_000
 
 function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathSheet; zone: string }) {
   const at = (instant: string) => sayMoment(instant, zone, sheet.now)
-  const { stop } = record
+  const { stop, otherStops } = record
   const wasLater = Date.parse(record.recordedAt) - Date.parse(record.happenedAt) > aMinuteMs
   return (
     <article className={record.struck === null ? 'dose-record' : 'dose-record is-struck'}>
@@ -62,20 +62,18 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
       </p>
       {record.note === null ? null : <p>{record.note}</p>}
       {record.twice ? <p className="t-2">{words.twiceBody}</p> : null}
-      {stop === null ? null : (
+      {stop === null ? null : <End stop={stop} sheet={sheet} at={at} />}
+      {otherStops.length > 0 ? (
         <>
-          <p>
-            {stop.cause === 'stopped'
-              ? words.stoppedAt({ at: at(stop.at), by: stop.by })
-              : sheet.contactMinutes === null
-                ? words.outOfWater({ at: at(stop.at), by: stop.by })
-                : words.endedInTime({ at: at(stop.at), by: stop.by })}
-          </p>
-          {stop.beforeStart ? <p className="t-strong text-magenta">{words.stopBeforeStart}</p> : null}
-          {stop.seen === null ? null : <p>{words.seen({ seen: stop.seen })}</p>}
-          {stop.rescue === null ? null : <p>{words.rescue({ rescue: stop.rescue })}</p>}
+          <p className="t-strong text-magenta">{words.severalEnds({ count: otherStops.length + 1 })}</p>
+          {otherStops.map((other) => (
+            <div key={other.id}>
+              <p className="t-label">{words.otherEnd}</p>
+              <End stop={other} sheet={sheet} at={at} />
+            </div>
+          ))}
         </>
-      )}
+      ) : null}
       {record.exceptions.length > 0 ? (
         <div className="stack">
           <h3 className="t-label">{words.exceptions}</h3>
@@ -90,18 +88,46 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
           ))}
         </div>
       ) : null}
-      <StrikeActs record={record} />
+      <StrikeActs record={record} at={at} />
     </article>
   )
 }
 
-/** Strikes a record or its end out, for whoever may: with a reason, and it stays readable. */
-function StrikeActs({ record }: { record: RecordedDose }) {
+/** When a bath ended, by whom, and what was seen and done. */
+function End({
+  stop,
+  sheet,
+  at,
+}: {
+  stop: NonNullable<RecordedDose['stop']>
+  sheet: BathSheet
+  at: (instant: string) => string
+}) {
+  const said = { at: at(stop.at), by: stop.by }
+  return (
+    <>
+      <p>
+        {stop.cause === 'stopped'
+          ? words.stoppedAt(said)
+          : sheet.contactMinutes === null
+            ? words.outOfWater(said)
+            : words.endedInTime(said)}
+      </p>
+      {stop.beforeStart ? <p className="t-strong text-magenta">{words.stopBeforeStart}</p> : null}
+      {stop.seen === null ? null : <p>{words.seen({ seen: stop.seen })}</p>}
+      {stop.rescue === null ? null : <p>{words.rescue({ rescue: stop.rescue })}</p>}
+    </>
+  )
+}
+
+/** Strikes a record or one of its ends out, for whoever may: with a reason, and it stays readable. */
+function StrikeActs({ record, at }: { record: RecordedDose; at: (instant: string) => string }) {
   const strike = useStrikeRecord()
   const say = useToast()
   const [asked, setAsked] = useState<{ kind: 'dose' | 'stop'; id: string; key: string } | null>(null)
   const { stop } = record
-  if (!record.mayStrike && !stop?.mayStrike) return null
+  const others = record.otherStops.filter((other) => other.mayStrike)
+  if (!record.mayStrike && !stop?.mayStrike && others.length === 0) return null
   return (
     <div className="row row-wrap">
       {record.mayStrike ? (
@@ -111,9 +137,18 @@ function StrikeActs({ record }: { record: RecordedDose }) {
       ) : null}
       {stop?.mayStrike ? (
         <Button size="small" onClick={() => setAsked({ kind: 'stop', id: stop.id, key: newId() })}>
-          {words.strikeStop}
+          {record.otherStops.length > 0 ? words.strikeOtherStop({ at: at(stop.at) }) : words.strikeStop}
         </Button>
       ) : null}
+      {others.map((other) => (
+        <Button
+          key={other.id}
+          size="small"
+          onClick={() => setAsked({ kind: 'stop', id: other.id, key: newId() })}
+        >
+          {words.strikeOtherStop({ at: at(other.at) })}
+        </Button>
+      ))}
       {asked === null ? null : (
         <ReasonDialog
           question={asked.kind === 'dose' ? words.strikeDoseQuestion : words.strikeStopQuestion}

@@ -71,7 +71,9 @@ export function nextAct(sheet: BathSheet): NextAct {
 
 /** Steps that still stand in the way, the second calculation aside: it has a place of its own. */
 export function openSteps(sheet: BathSheet): BathSheet['steps'] {
-  return sheet.steps.filter(({ state, place }) => state !== 'met' && place !== 'second-calculation')
+  return sheet.steps.filter(
+    ({ state, place, overridden }) => state !== 'met' && place !== 'second-calculation' && !overridden,
+  )
 }
 
 /** Cautions that no step speaks of. */

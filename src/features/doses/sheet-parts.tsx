@@ -1,7 +1,7 @@
 import { OctagonX } from 'lucide-react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { overrideWords, sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
@@ -10,6 +10,7 @@ import { Icon } from '../../ui/icon.tsx'
 import { PairOfAmounts } from '../../ui/pair-of-amounts.tsx'
 import { WorkingBlock } from '../../ui/working-block.tsx'
 import { DoseText } from '../orders/index.ts'
+import { OverrideAct } from './override-dialog.tsx'
 import { otherCautions } from './sheet-model.ts'
 
 /** When the bath is stopped at once: on the sheet from the first look to the last. */
@@ -150,6 +151,37 @@ export function CautionsNow({ sheet }: { sheet: BathSheet }) {
           }
         >
           {[caution.text, ...(caution.overridden ? [] : caution.resolve)].join(' ')}
+          <OverrideAct sheet={sheet} stop={caution} />
+        </CautionBlock>
+      ))}
+    </section>
+  )
+}
+
+/** Stops that a veterinarian overrode for this dose, with the reason as it was signed. */
+export function SignedOverrides({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  if (sheet.overrides.length === 0) return null
+  return (
+    <section className="stack">
+      <h2 className="t-head">{overrideWords.heading}</h2>
+      {sheet.overrides.map(({ id, title, text, reason, signature }) => (
+        <CautionBlock
+          key={id}
+          level="stop"
+          title={title}
+          answer={
+            signature.state === 'intact'
+              ? orderViewWords.overridden({
+                  name: overrideWords.signedAt({
+                    name: signature.printedName,
+                    at: sayMoment(signature.signedAt, zone, sheet.now),
+                  }),
+                  reason,
+                })
+              : overrideWords.broken
+          }
+        >
+          {text}
         </CautionBlock>
       ))}
     </section>

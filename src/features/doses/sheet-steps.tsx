@@ -1,5 +1,6 @@
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
+import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
@@ -9,6 +10,7 @@ import { Conditions } from '../../ui/condition-row.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useNoteLot } from './mutations.ts'
+import { OverrideAct } from './override-dialog.tsx'
 
 type Step = BathSheet['steps'][number]
 
@@ -33,8 +35,29 @@ function OpenStep({ step, sheet, lotId }: { step: Step; sheet: BathSheet; lotId:
   return (
     <span className="open-step">
       {step.help === null ? null : <span>{step.help}</span>}
-      <WhereToResolve step={step} sheet={sheet} lotId={lotId} />
+      {step.overridden ? (
+        <Overridden step={step} sheet={sheet} />
+      ) : (
+        <WhereToResolve step={step} sheet={sheet} lotId={lotId} />
+      )}
+      {stopsOf(sheet, step).map((stop) => (
+        <OverrideAct key={stop.code} sheet={sheet} stop={stop} />
+      ))}
     </span>
+  )
+}
+
+/** The stops that a step stands for. */
+const stopsOf = (sheet: BathSheet, step: Step) =>
+  sheet.cautions.filter(({ ruleId, level }) => ruleId === step.ruleId && level === 'stop')
+
+function Overridden({ step, sheet }: { step: Step; sheet: BathSheet }) {
+  return stopsOf(sheet, step).map(({ code, overridden }) =>
+    overridden ? (
+      <span key={code} className="t-strong">
+        {orderViewWords.overridden({ name: overridden.by, reason: overridden.reason })}
+      </span>
+    ) : null,
   )
 }
 

@@ -24,7 +24,7 @@ import { RecordedDoses } from './recorded-doses.tsx'
 import { RunningSteps, RunningTime } from './running-bath.tsx'
 import { lotToOpen, nextAct, openRecord, openSteps, restInTheWay } from './sheet-model.ts'
 import type { NextAct } from './sheet-model.ts'
-import { Amounts, CautionsNow, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
+import { Amounts, CautionsNow, SignedOverrides, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'
 import { serverOffsetMs } from './timer-model.ts'
 import { UnsentActs } from './unsent-acts.tsx'
@@ -121,6 +121,7 @@ export function WholeSheet({
             ) : null}
           </>
         ) : null}
+        <SignedOverrides sheet={sheet} zone={zone} />
         <RecordedDoses sheet={sheet} zone={zone} />
         {running ? <DosePicker sheet={sheet} zone={zone} /> : null}
         <div className="row row-wrap">

@@ -48,6 +48,7 @@ const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
   struck: null,
   mayStrike: false,
   twice: false,
+  otherStops: [],
   stop: null,
   ...given,
 })
@@ -93,6 +94,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   driftPercent: 0,
   driftWithin: true,
   cautions: [],
+  overrides: [],
   steps: [],
   secondNeeded: true,
   first: null,
@@ -177,6 +179,7 @@ describe('what the sheet shows once', () => {
     help: null,
     resolve: [],
     place: 'readings' as const,
+    overridden: false,
   }
   const caution = {
     ruleId: 'R31',
@@ -186,6 +189,7 @@ describe('what the sheet shows once', () => {
     text: 'No.',
     resolve: [],
     overridden: null,
+    finding: null,
   }
   it('says a caution in its step and not a second time', () => {
     const one = sheet({
@@ -194,6 +198,7 @@ describe('what the sheet shows once', () => {
       why: ['Missing. No.', 'The order is held.'],
     })
     expect(openSteps(one)).toEqual([step])
+    expect(openSteps(sheet({ steps: [{ ...step, overridden: true }] }))).toEqual([])
     expect(otherCautions(one).map(({ ruleId }) => ruleId)).toEqual(['R42'])
     expect(restInTheWay(one)).toEqual(['The order is held.'])
   })

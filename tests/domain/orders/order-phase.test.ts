@@ -12,6 +12,7 @@ const signed = (doneKeys: string[] = [], more: Partial<OrderStanding> = {}): Ord
   signed: { planned, doneKeys, lastWindowUntil },
   held: false,
   ended: false,
+  running: false,
   ...more,
 })
 
@@ -34,7 +35,7 @@ describe('the doses of an order', () => {
 })
 
 describe('the phase of an order', () => {
-  const draft: OrderStanding = { stage: 'draft', signed: null, held: false, ended: false }
+  const draft: OrderStanding = { stage: 'draft', signed: null, held: false, ended: false, running: false }
   it.each<[string, OrderStanding, number, string]>([
     ['a draft', draft, 0, 'draft'],
     ['a proposal', { ...draft, stage: 'proposed' }, 0, 'proposed'],
@@ -49,6 +50,9 @@ describe('the phase of an order', () => {
     ['all done stays so after the last window', signed(['1', '2', '3']), 200, 'completed'],
     ['the last instant of the last window', signed(['1']), 68, 'in-progress'],
     ['past the last window', signed(['1']), 69, 'expired'],
+    ['past the last window while a bath runs', signed(['1'], { running: true }), 69, 'in-progress'],
+    ['past it while two run', signed(['1', '2'], { running: true }), 69, 'in-progress'],
+    ['held while a bath runs', signed(['1'], { running: true, held: true }), 69, 'held'],
     ['held', signed(['1'], { held: true }), 20, 'held'],
     [
       'a hold does not lapse with the window: somebody has to look',

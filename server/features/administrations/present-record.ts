@@ -1,0 +1,85 @@
+import type { RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
+import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import type { DoseReadRow, OtherStop } from './administrations.reads.ts'
+
+/** A stored amount in words; null where none was stored. */
+export const storedText = (value: string | null, unit: string | null) =>
+  value === null || unit === null ? null : formatDose(value, unit as UnitCode).text
+
+/** Whether this person may strike a record out now: a slip of the hand on its day, or as a veterinarian. */
+function mayStrike(row: { recordedAt: Date; recordedBy: string }, { now, actor, zone }: Reader): boolean {
+  const dayOf = (at: string) => facilityDateOf(at, zone)
+  const isOwn = row.recordedBy === actor.personId && dayOf(row.recordedAt.toISOString()) === dayOf(now)
+  return decide('dose.strike', actor.roles, { 'own-record-of-the-day': isOwn }).allowed
+}
+
+interface Reader {
+  actor: Actor
+  zone: string
+  now: string
+}
+
+export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
+  const happened = (one: DoseReadRow) => one.kind === 'given' || one.kind === 'recorded'
+  return {
+    id: row.id,
+    key: row.dose_key,
+    kind: row.kind,
+    amountText: storedText(row.amount_entered_value, row.amount_entered_unit),
+    lotNumber: row.lot_number,
+    happenedAt: row.happened_at.toISOString(),
+    recordedAt: row.recorded_at.toISOString(),
+    by: row.by_name,
+    note: row.note,
+    exceptions: JSON.parse(row.exceptions_text) as RecordedDose['exceptions'],
+    struck:
+      (row.struck_reason !== null &&
+        row.struck_at && {
+          reason: row.struck_reason,
+          at: row.struck_at.toISOString(),
+          by: row.struck_by ?? '',
+        }) ||
+      null,
+    mayStrike:
+      row.struck_reason === null &&
+      mayStrike({ recordedAt: row.recorded_at, recordedBy: row.recorded_by }, reader),
+    twice:
+      row.struck_reason === null &&
+      happened(row) &&
+      all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && happened(one)),
+    stop:
+      row.stop_at &&
+      row.stop_cause &&
+      presentStop(row, reader, {
+        id: row.stop_id ?? '',
+        at: row.stop_at.toISOString(),
+        by: row.stop_by ?? '',
+        cause: row.stop_cause,
+        seen: row.stop_seen,
+        rescue: row.stop_rescue,
+        recorded_at: (row.stop_recorded_at ?? row.recorded_at).toISOString(),
+        recorded_by: row.stop_recorded_by ?? '',
+      }),
+    otherStops: row.other_stops.map((stop) => presentStop(row, reader, stop)),
+  }
+}
+
+function presentStop(row: DoseReadRow, reader: Reader, stop: OtherStop): NonNullable<RecordedDose['stop']> {
+  const at = new Date(stop.at)
+  return {
+    id: stop.id,
+    at: at.toISOString(),
+    beforeStart: at < row.happened_at,
+    mayStrike:
+      row.struck_reason === null &&
+      mayStrike({ recordedAt: new Date(stop.recorded_at), recordedBy: stop.recorded_by }, reader),
+    by: stop.by,
+    cause: stop.cause,
+    seen: stop.seen,
+    rescue: stop.rescue,
+  }
+}

@@ -1,0 +1,89 @@
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
+import { agentNames } from '../../../shared/messages/formulary.ts'
+import { orderWords } from '../../../shared/messages/orders.ts'
+import { engineVersion } from './order-content.ts'
+import type { SignedOrder } from './order-content.ts'
+import type { Copies, OrderReadRow } from './orders.reads.ts'
+
+const nothingStated: BathOrderFields['stated'] = {
+  waterKind: null,
+  oxygenIsLogged: null,
+  hasBloom: null,
+  hasPlantsOrAlgae: null,
+  lights: null,
+  experienceWith: [],
+}
+
+/**
+ * As much of an order whose signed text cannot be read as the columns beside it tell: where, whom, which drug and when.
+ * What has happened at the tank is recorded under it. No figure that somebody could dose by is in it.
+ */
+export function standInOrder(
+  order: Pick<OrderReadRow, 'number' | 'enclosure_code' | 'enclosure_name'>,
+  { version, animalIds }: Copies,
+): SignedOrder {
+  const text = (name: string) => String(version[name] ?? '')
+  const number = (name: string) => (version[name] === null ? null : Number(version[name]))
+  const agent = text('agent') as AgentCode
+  const contactMinutes = number('contact_minutes')
+  return {
+    kind: 'bath-order',
+    engineVersion,
+    number: order.number,
+    versionNo: Number(version['version_no']),
+    enclosure: { code: order.enclosure_code, name: order.enclosure_name },
+    water: {
+      enclosureCode: order.enclosure_code,
+      vessel: false,
+      bodies: [],
+      volumeText: null,
+      volumeNote: '',
+      animals: [],
+    },
+    valves: [],
+    volume: { determinationId: '', netVolumeLitres: 0, errorPercent: null, method: '', measuredOn: '' },
+    product: {
+      id: text('product_id'),
+      agent,
+      establishedName: agentNames[agent],
+      productName: '',
+      strength: { value: '', unit: '' },
+      strengthBasis: '',
+      densityGPerMl: null,
+    },
+    lot: null,
+    doseLine: null,
+    fields: {
+      enclosureId: text('enclosure_id'),
+      animalIds: [...animalIds],
+      productId: text('product_id'),
+      lotId: null,
+      doseLineId: null,
+      problem: '',
+      use: null,
+      target: null,
+      basis: null,
+      timing: contactMinutes === null ? 'indefinite' : 'timed',
+      contactMinutes,
+      doses: Number(version['doses']),
+      intervalHours: number('interval_hours'),
+      startsAt: new Date(text('starts_at')).toISOString(),
+      setting: null,
+      division: null,
+      stopIf: orderWords.stopIfUnreadable,
+      instructions: '',
+      allowedVolumeDriftPercent: 0,
+      stated: nothingStated,
+    },
+    targetText: '',
+    basisText: '',
+    amount: { unrounded: 0, unroundedUnit: 'g', measured: null, text: '', rangeText: null },
+    working: [],
+    cautions: [],
+    conditions: [],
+    overrides: [],
+    read: [],
+    facts: null,
+  }
+}

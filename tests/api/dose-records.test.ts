@@ -1,0 +1,147 @@
+import pg from 'pg'
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { aFormalinHouse } from '../builders/a-bath.ts'
+import type { FormalinHouse } from '../builders/a-bath.ts'
+import { newKey, startApi, testDay } from '../support/api.ts'
+import type { TestApi } from '../support/api.ts'
+
+let api: TestApi
+let owner: pg.Client
+let house: FormalinHouse
+beforeAll(async () => {
+  api = await startApi()
+  owner = new pg.Client({ connectionString: api.ownerUrl })
+  await owner.connect()
+  house = await aFormalinHouse(api)
+})
+beforeEach(() => api.clock.set(testDay))
+afterAll(async () => {
+  await owner.end()
+  await api.stop()
+})
+
+const stopBath = (doseId: string, happenedAt: string, id = api.nextId()) =>
+  house.technician.agent.post(`/api/doses/${doseId}/stop`).send({ id, cause: 'time-up', happenedAt })
+
+describe('a bath whose end was recorded twice', () => {
+  it('shows both, says so, and counts the later one until it is struck out', async () => {
+    const number = await house.signedBath(await house.tankWithSchool())
+    const dose = api.nextId()
+    await house.record(number, { id: dose, happenedAt: '2026-12-01T17:00:00Z' }).expect(201)
+    // the hour typed one too early
+    const wrong = api.nextId()
+    await stopBath(dose, '2026-12-01T16:45:00Z', wrong).expect(201)
+    const both = await stopBath(dose, '2026-12-01T17:45:00Z').expect(201)
+    const [record] = both.body.recorded
+    expect(record.stop).toMatchObject({ at: '2026-12-01T17:45:00.000Z', beforeStart: false })
+    expect(record.otherStops).toMatchObject([
+      {
+        id: wrong,
+        at: '2026-12-01T16:45:00.000Z',
+        beforeStart: true,
+        mayStrike: true,
+        by: 'Test technician',
+      },
+    ])
+    const struck = await house.technician.agent
+      .post(`/api/dose-records/stop/${wrong}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'the hour was typed wrong' })
+      .expect(200)
+    expect(struck.body.recorded[0]).toMatchObject({
+      stop: { at: '2026-12-01T17:45:00.000Z' },
+      otherStops: [],
+    })
+  })
+})
+
+describe('a dose that was not given', () => {
+  it.each(['withheld', 'refused'])('and is recorded as %s carries no amount', async (kind) => {
+    const number = await house.signedBath(await house.tankWithSchool())
+    const refused = await house.record(number, { kind })
+    expect(refused.status).toBe(422)
+    expect(refused.body.errors).toMatchObject([{ pointer: '/amount' }])
+    expect(refused.body.errors[0].detail).toContain('Nothing goes in')
+    const kept = await house.record(number, { kind, amount: null, lotId: null }).expect(201)
+    expect(kept.body.recorded).toMatchObject([{ kind, amountText: null }])
+  })
+
+  it('and is recorded as given needs one', async () => {
+    const number = await house.signedBath(await house.tankWithSchool())
+    const refused = await house.record(number, { amount: null })
+    expect(refused.body.errors).toMatchObject([{ pointer: '/amount', detail: 'Type how much was given.' }])
+  })
+})
+
+describe('an order of several baths', () => {
+  it('is in progress while one of them runs past its last window, and not expired', async () => {
+    const number = await house.signedBath(await house.tankWithSchool(), { doses: 3, intervalHours: 1 })
+    await house.record(number).expect(201)
+    api.clock.set(new Date('2026-12-01T23:00:00Z'))
+    const listed = await house.technician.agent.get(`/api/orders?q=${number}`).expect(200)
+    expect(listed.body.rows[0].phase).toBe('in-progress')
+    const [{ id } = { id: '' }] = (
+      await owner.query<{ id: string }>(
+        `SELECT d.id FROM doses d JOIN order_versions v ON v.id = d.order_version_id JOIN orders o ON o.id = v.order_id WHERE o.number = $1`,
+        [number],
+      )
+    ).rows
+    await stopBath(id, '2026-12-01T22:00:00Z').expect(201)
+    const after = await house.technician.agent.get(`/api/orders?q=${number}`).expect(200)
+    expect(after.body.rows[0].phase).toBe('expired')
+  })
+})
+
+describe('a dose under an order that is not what was signed', () => {
+  const openOf = async (accession: string) =>
+    (await (await api.as('veterinarian')).agent.get(`/api/animals/${accession}`).expect(200)).body
+      .discrepancies as { kind: string; forRole: string; facts: Record<string, string> }[]
+
+  it.each([
+    ['text is not readable any more', `'x' || text`],
+    ['text is another JSON', `'{"content":{"number":"TO-1"}}'`],
+  ])('whose %s is recorded, marked, and a veterinarian explains it', async (_, text) => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await owner.query(`UPDATE signed_texts SET text = ${text} WHERE subject_label = $1`, [number])
+    const { agent } = house.technician
+    const sheet = await agent.get(house.doseAt(number)).expect(200)
+    expect(sheet.body).toMatchObject({
+      state: 'broken',
+      mayStart: false,
+      signedAmountText: null,
+      amountNow: null,
+      enclosureCode: bath.tank.code,
+    })
+    expect(sheet.body.why.join(' ')).toContain('cannot be read any more')
+    expect(sheet.body.treated.join()).toContain('Yellow tang')
+    expect((await house.calculateFirst(number)).body.code).toBe('broken-record')
+    expect((await house.give(number)).body.code).toBe('broken-record')
+    expect((await agent.get(house.doseAt(number, '/print'))).status).toBe(409)
+
+    const id = api.nextId()
+    const recorded = await house.record(number, { id }).expect(201)
+    expect(recorded.body.recorded).toMatchObject([{ id, kind: 'recorded' }])
+    const codes = recorded.body.recorded[0].exceptions.map(({ code }: { code: string }) => code)
+    expect(codes).toContain('not-intact')
+    expect(codes).not.toContain('amount-differs')
+    expect(await openOf(bath.school.accession)).toMatchObject([
+      { kind: 'dose-under-broken-order', forRole: 'veterinarian', facts: { order: number, key: '1' } },
+    ])
+    // the same again is kept once, and its end can be recorded
+    await house.record(number, { id }).expect(201)
+    expect((await stopBath(id, '2026-12-01T18:25:00Z').expect(201)).body.recorded[0].stop).not.toBeNull()
+    expect(await openOf(bath.school.accession)).toHaveLength(1)
+  })
+
+  it('whose columns were changed opens the same discrepancy', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await owner.query(
+      `UPDATE order_versions v SET amount_entered_value = 2180 FROM orders o WHERE o.id = v.order_id AND o.number = $1`,
+      [number],
+    )
+    await house.record(number).expect(201)
+    expect((await openOf(bath.school.accession)).map(({ kind }) => kind)).toContain('dose-under-broken-order')
+  })
+})
