@@ -250,7 +250,7 @@ export const secondWords = defineMessages({
     'The second has to be another person’s: any veterinarian, technician or keeper who signs in under their own name.',
   alone: 'Nobody else can be reached: I repeat it myself',
   aloneBody: (p: { from: string }) =>
-    `From ${p.from} you may repeat it yourself: read label, mark and container again, and work the amount out anew. Ask somebody elsewhere first, who can work from photographs of the label and the balance. The dose is marked for the veterinarian.`,
+    `Nobody else here? Ask somebody elsewhere, who can work from photographs of label and balance. Where nobody can be reached you may repeat it yourself from ${p.from}: read label, mark and container again, and work the amount out anew. The dose is marked for the veterinarian.`,
   noFirst: 'There is no first calculation yet',
   noFirstBody: 'A veterinarian or technician works the amount out first, with the lot in the hand.',
   mayNot: 'Your roles do not include this',

@@ -56,6 +56,7 @@ afterAll(async () => {
 
 const expectedErrors = [
   /401 \(Unauthorized\)/,
+  /403 \(Forbidden\) \(.*\/second-calculation/,
   /409 \(Conflict\)/,
   /422 \(Unprocessable/,
   /ERR_INTERNET_DISCONNECTED/,
@@ -182,7 +183,15 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await tech.getByText('You made the first calculation').waitFor()
     await tech.getByText(/another person’s: any veterinarian, technician or keeper/).waitFor()
     expect(await tech.getByRole('textbox', { name: /Amount that you work out/ }).count()).toBe(0)
+    await tech
+      .getByText(/you may repeat it yourself from \d\d:\d\d: read label, mark and container again/)
+      .waitFor()
     await expectSound(tech, 'bath-same-person-390')
+    // with nobody to be reached they read everything again, and not before the time is over
+    await tech.getByRole('button', { name: 'Nobody else can be reached: I repeat it myself' }).click()
+    await fillSecond(tech, '218')
+    await tech.getByRole('button', { name: 'Compare with the first' }).click()
+    await tech.getByText(/You made the first calculation. Ask another person/).waitFor()
     await tech.goto(`${app.url}${sheetAt}?dose=1`)
 
     // the second person sees nothing of the first, on the page or on the wire
