@@ -98,6 +98,7 @@ export const cautionTitles = defineMessages({
   'beyond-every-line': 'Dose is beyond every dose line',
   'line-water-unknown': 'Kind of water is not known, and the dose line is for one',
   'line-of-other-water': 'Dose line is for other water',
+  'left-in-bath-line': 'Left in the water, and the dose line is for a bath',
   'left-in-over-line': 'Left in the water, and the dose line is for a time',
   'contact-over-line': 'Contact is longer than the dose line',
   'contact-far-over-line': 'Contact is far longer than the dose line',
@@ -275,6 +276,8 @@ export const cautionTexts = defineMessages({
   'line-water-unknown': (p) =>
     `The dose line is for ${p.lineWater}. Nobody said what this water is, and no salinity was read.`,
   'line-of-other-water': (p) => `The dose line is for ${p.lineWater}. This is ${p.water}.`,
+  'left-in-bath-line': () =>
+    'The dose line is for a bath that has an end, though its source names no minutes. The agent is to stay in the water.',
   'left-in-over-line': (p) =>
     `The dose line is for a contact of at most ${minutes(p.limitMinutes)}. The agent is to stay in the water.`,
   'contact-over-line': (p) =>

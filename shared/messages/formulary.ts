@@ -31,6 +31,7 @@ export const doseUses = defineMessages({
   'external-bacteria': 'external bacteria, bath',
   'salt-bath': 'salt bath for hours',
   'salt-dip': 'salt dip',
+  'salt-prolonged': 'salt, left in the water',
   sedation: 'sedation and anaesthesia',
   'protozoa-course': 'protozoa, course in sea water',
 } satisfies Record<DoseUse, string>)

@@ -91,6 +91,21 @@ describe('what may be signed: an order', () => {
     expect(await fired({ ...short, ...timed(2881) })).toEqual(['warning contact-over-line'])
     expect(await fired({ ...short, ...timed(5761) })).toEqual(['stop contact-far-over-line'])
     expect(await fired(short)).toEqual(['stop left-in-over-line'])
+    const tricaine = await aProduct(api, {
+      agent: 'tricaine',
+      productName: 'Tricaine',
+      strengthBasis: 'salt',
+    })
+    const asleep = {
+      productId: tricaine.id,
+      lotId: tricaine.lotId,
+      basis: 'salt',
+      target: { value: '75', unit: 'mg/L' },
+    }
+    // an anaesthetic is watched, and has an end
+    expect(await fired({ ...asleep, doseLineId: lineOf('sedation') })).toEqual(['stop left-in-bath-line'])
+    expect(await fired(asleep)).toEqual(['stop no-line-fits'])
+    expect(await fired({ ...asleep, doseLineId: lineOf('sedation'), ...timed(20) })).toEqual([])
     // left out, the line loosens nothing: only the one for what stays in sea water counts
     expect(await fired({ target: { value: '20', unit: 'mg/L' } })).toEqual(['stop far-over-default'])
     expect(await fired({ target: { value: '10', unit: 'mg/L' }, ...timed(2880) })).toEqual([

@@ -5,6 +5,7 @@ import type { BathProduct } from '../../../shared/domain/dose/bath-product.ts'
 import type { BathOrderDraft, ChosenProduct } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
+import { staysInWater } from '../../../shared/domain/formulary/dose-line.ts'
 import type { ConcentrationUnit, DefaultRange } from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
@@ -78,13 +79,14 @@ export function chosenOf(
   }
 }
 
-const rangeOf = ({ low, high, unit, basis, longestContactMinutes, water }: DoseLine): DefaultRange => ({
+const rangeOf = ({ low, high, unit, basis, longestContactMinutes, water, use }: DoseLine): DefaultRange => ({
   low,
   high,
   unit: unit as ConcentrationUnit,
   basis,
   longestContactMinutes,
   water,
+  stays: staysInWater(use),
 })
 
 /**

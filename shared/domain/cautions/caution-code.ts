@@ -115,6 +115,7 @@ export interface CautionParams {
   'beyond-every-line': { target: CautionQuantity; high: CautionQuantity; limitFactor: number }
   'line-water-unknown': { lineWater: WaterKind }
   'line-of-other-water': { lineWater: WaterKind; water: 'fresh' | 'brackish' | 'marine' }
+  'left-in-bath-line': Record<never, never>
   'left-in-over-line': { limitMinutes: number }
   'contact-over-line': { minutes: number; limitMinutes: number }
   'contact-far-over-line': { minutes: number; limitMinutes: number }

@@ -25,6 +25,8 @@ export interface DefaultRange {
   /** Longest contact that its source names; null: left in the water, or to effect. */
   longestContactMinutes: number | null
   water: WaterKind
+  /** Its use leaves the agent in the water. */
+  stays: boolean
 }
 
 /** One animal or group in the connected water. */

@@ -10,9 +10,12 @@ export function isForWater({ water }: DefaultRange, { water: { kind } }: Caution
 }
 
 /** Whether the contact ordered is one that a line covers; a time that is not stated yet fits any. */
-export function isForContact({ longestContactMinutes }: DefaultRange, { order }: CautionFacts): boolean {
+export function isForContact(
+  { longestContactMinutes, stays }: DefaultRange,
+  { order }: CautionFacts,
+): boolean {
+  if (valueOf(order.timing) === 'indefinite') return stays && longestContactMinutes === null
   if (longestContactMinutes === null) return true
-  if (valueOf(order.timing) === 'indefinite') return false
   const minutes = valueOf(order.contactMinutes)
   return minutes === null || !exceeds(minutes, longestContactMinutes)
 }

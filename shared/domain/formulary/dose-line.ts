@@ -15,8 +15,22 @@ export type DoseUse =
   | 'external-bacteria'
   | 'salt-bath'
   | 'salt-dip'
+  | 'salt-prolonged'
   | 'sedation'
   | 'protozoa-course'
+
+/** Uses in which the agent stays in the water; of all others the animals come out of it, or it out of the water. */
+const usesThatStay: readonly DoseUse[] = [
+  'ectoparasites-indefinite',
+  'ectoparasites-marine-course',
+  'ectoparasites-fresh-single',
+  'flukes-prolonged',
+  'salt-prolonged',
+  'protozoa-course',
+]
+
+/** Whether a use leaves its agent in the water. */
+export const staysInWater = (use: string): boolean => usesThatStay.some((one) => one === use)
 
 /** One published range for one use of an agent in water, with the basis of its figure and where it comes from. */
 export interface DoseLine {

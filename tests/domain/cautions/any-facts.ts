@@ -54,6 +54,7 @@ const range = fc.record({
   basis,
   longestContactMinutes: fc.option(fc.constantFrom(10, 30, 60, 2880)),
   water: fc.constantFrom('fresh' as const, 'marine' as const, 'both' as const),
+  stays: fc.boolean(),
 })
 
 /** Facts of any order in any state of knowledge. */

@@ -109,6 +109,12 @@ describe('R49: water and contact of the dose line that is named', () => {
   ])('%s', (_, longestContactMinutes, minutes, expected) =>
     expect(named({ longestContactMinutes }, minutes)).toEqual(expected),
   )
+  it('stops a line for a bath whose agent is to stay, though it names no minutes', () => {
+    const bath = { stays: false, longestContactMinutes: null }
+    expect(named(bath, null)).toEqual(['stop left-in-bath-line'])
+    expect(named(bath, 20_160)).toEqual([])
+    expect(named({ ...bath, longestContactMinutes: 30 }, null)).toEqual(['stop left-in-over-line'])
+  })
   it('stops a line of other water, and asks where nobody knows what water it is', () => {
     const inWater = (water: DefaultRange['water'], kind: CautionFacts['water']['kind']) =>
       named({ water }, 30, { water: { kind } })
@@ -151,6 +157,11 @@ describe('R26, R47: no line is named, and only lines for such water and such a c
     ['10 mg/L for two days', of(10, praziquantel, 2880), ['warning line-not-named']],
     ['10 mg/L for longer', of(10, praziquantel, 2881), ['stop far-over-default']],
     ['left in fresh water', of(2, praziquantel, null, known('fresh')), ['stop no-line-fits']],
+    [
+      'left in, and the only line is for a bath',
+      of(2, [aLine(10, { stays: false })], null),
+      ['stop no-line-fits'],
+    ],
     ['75 mg/L for half an hour', of(75, peroxide, 30), ['warning line-not-named']],
     ['75 mg/L for five hours', of(75, peroxide, 300), ['stop no-line-fits']],
     ['100 mg/L is a figure for fresh water', of(100, peroxide, 30), ['warning over-default']],

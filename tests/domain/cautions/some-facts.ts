@@ -64,6 +64,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
         basis: target.basis ?? 'active',
         longestContactMinutes: null,
         water: 'both',
+        stays: true,
       }),
       agentRanges: known([]),
       amountGrams: known(10),
@@ -181,6 +182,7 @@ export function aLine(high: number, change: Partial<DefaultRange> = {}): Default
     basis: 'active',
     longestContactMinutes: null,
     water: 'both',
+    stays: true,
     ...change,
   }
 }

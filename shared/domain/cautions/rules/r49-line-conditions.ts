@@ -56,14 +56,15 @@ function judgeWater({ water: lineWater }: DefaultRange, { water: { kind } }: Cau
 }
 
 function judgeContact(
-  { longestContactMinutes: limitMinutes }: DefaultRange,
+  { longestContactMinutes: limitMinutes, stays }: DefaultRange,
   { order }: CautionFacts,
   stopFactor: number,
 ): CautionFinding[] {
-  if (limitMinutes === null) return []
   const resolvedBy = ['shorten-contact', 'choose-dose-line'] as const
-  if (valueOf(order.timing) === 'indefinite')
-    return [{ code: 'left-in-over-line', level: 'stop', params: { limitMinutes }, resolvedBy }]
+  const isLeftIn = valueOf(order.timing) === 'indefinite'
+  if (limitMinutes === null)
+    return isLeftIn && !stays ? [{ code: 'left-in-bath-line', level: 'stop', params: {}, resolvedBy }] : []
+  if (isLeftIn) return [{ code: 'left-in-over-line', level: 'stop', params: { limitMinutes }, resolvedBy }]
   const minutes = valueOf(order.contactMinutes)
   if (minutes === null || !exceeds(minutes, limitMinutes)) return []
   const isFar = exceeds(minutes, limitMinutes * stopFactor)
