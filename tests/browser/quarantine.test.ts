@@ -73,10 +73,11 @@ describe.each([
     await picture(page, 'board')
     await expectSound(page, 'board')
     if (size === desk) {
-      await page.getByText(/^The newest 60 of \d+.observations\.$/).waitFor()
-      expect(await page.getByText('look 60.', { exact: true }).count()).toBe(0)
+      const log = page.getByRole('complementary', { name: 'Observations' })
+      await log.getByText(/^The newest 60 of \d+.observations\.$/).waitFor()
+      expect([await log.getByText('look 59').count(), await log.getByText('look 60').count()]).toEqual([1, 0])
       await page.getByRole('button', { name: 'Older observations' }).click()
-      await page.getByText('look 60.', { exact: true }).waitFor()
+      await log.getByText('look 60').waitFor()
       expect(await page.getByRole('button', { name: 'Older observations' }).count()).toBe(0)
     }
     await page.getByRole('radio', { name: 'Table' }).click()
