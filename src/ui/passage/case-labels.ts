@@ -16,6 +16,8 @@ export interface CaseLabel {
 /**
  * Places the labels of the running leg: under the course, over it where there is no room, and left out (they stand in
  * the table) where there is none either. Marks that are due or overdue are placed first.
+ *
+ * @param standing words that have their place already, such as those over a pause
  */
 export function layCaseLabels(
   view: PassageView,
@@ -24,9 +26,10 @@ export function layCaseLabels(
   width: number,
   nowX: number,
   dayWords: (day: number) => string,
+  standing: readonly Parameters<typeof textBox>[0][] = [],
 ): CaseLabel[] {
   const dayZero = view.legs[view.legs.length - 1]?.from ?? view.today
-  const taken: ReturnType<typeof textBox>[] = []
+  const taken = standing.map((words) => textBox(words))
   const labels: CaseLabel[] = []
   const urgency = (mark: CourseMark) => (mark.state === 'overdue' || mark.state === 'due' ? 0 : 1)
   const inOrder = marks.filter((mark) => !mark.old).sort((a, b) => urgency(a) - urgency(b) || a.x - b.x)

@@ -90,14 +90,14 @@ function shownSteps(leg: PassageLeg, scale: DayScale, y: number): DrawnWords[] {
   return shown
 }
 
-/** Animals at each count, over the running course and under the earlier one, where no label stands. */
+/** Animals at each count, over the running course and under the earlier one, where no label and no later count stands. */
 export function soundings(
   view: PassageView,
   scale: DayScale,
   labels: readonly CaseLabel[],
   courseY: number,
 ): DrawnWords[] {
-  return view.legs.flatMap((leg) =>
+  const candidates = view.legs.flatMap((leg) =>
     leg.counts
       .map((count): DrawnWords => ({
         key: `${leg.from} ${count.on}`,
@@ -119,6 +119,11 @@ export function soundings(
         }),
       ),
   )
+  // two counts that ran into one another would read as one number; the newest is kept
+  return candidates.reduceRight<DrawnWords[]>((kept, one) => {
+    const box = textBox(one)
+    return kept.some((other) => overlap(box, textBox(other))) ? kept : [one, ...kept]
+  }, [])
 }
 
 /** On the land: when it may be cleared at the earliest; or why nothing is set. On a narrow drawing at its foot. */

@@ -2,7 +2,9 @@ import { AnchorMark } from '../empty-harbour.tsx'
 import { StepMark } from '../step-mark.tsx'
 import { passageWords } from '../../../shared/messages/passage.ts'
 import { classNames } from '../class-names.ts'
+import { caseHalf } from './passage-geometry.ts'
 import type { CourseGeometry, CourseMark, CourseText, PassageSize } from './passage-geometry.ts'
+import { pauseWords } from './passage-words.ts'
 
 /** The linework of one passage: legs, course, marks, ship or strokes of a hold, harbour. */
 export function CourseDrawing({
@@ -16,7 +18,7 @@ export function CourseDrawing({
 }) {
   const { y, nowX } = course
   const inCase = size === 'case'
-  const half = inCase ? 7 : 5
+  const half = inCase ? caseHalf : 5
   return (
     <g>
       {course.oldLegs.map((old) => (
@@ -40,12 +42,12 @@ export function CourseDrawing({
             d={`M${pause.x1} ${y - half}v${half * 2}M${pause.x2} ${y - half}v${half * 2}`}
             className="p-line"
           />
-          {size === 'close' ? null : (
-            <text x={(pause.x1 + pause.x2) / 2} y={y - half - 5} className="s-11 s-n s-2 mid">
-              {passageWords.paused({ days: pause.days })}
-            </text>
-          )}
         </g>
+      ))}
+      {(size === 'close' ? [] : pauseWords(course, half)).map((words) => (
+        <text key={words.x} x={words.x} y={words.y} className="s-11 s-n s-2 mid">
+          {words.text}
+        </text>
       ))}
       {course.ahead ? <path d={`M${course.ahead.x1} ${y}H${course.ahead.x2}`} className="p-ahead" /> : null}
       {course.texts.map((text) => (

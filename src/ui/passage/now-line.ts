@@ -5,8 +5,8 @@ import type { CourseText } from './passage-geometry.ts'
 export type CaseWords = Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'> & { sizePx: number }
 
 /** About how wide a letter is, of the height of its type. */
-const letterPart = 0.5
-const marginPx = 2
+const letterPart = 0.47
+const marginPx = 4
 
 /** The line of now in pieces: it is broken where words stand and crosses none of them. */
 export function nowLinePieces(

@@ -7,9 +7,9 @@ import { harbourLines, labelWords, oldLegWords, soundings, wholeOf } from './cas
 import { CourseDrawing } from './course-drawing.tsx'
 import { dayScale, weekStarts } from './day-scale.ts'
 import { nowLinePieces } from './now-line.ts'
-import { layPassage } from './passage-geometry.ts'
+import { caseHalf, layPassage } from './passage-geometry.ts'
 import { PassageFixes } from './passage-fixes.tsx'
-import { passageSummary } from './passage-words.ts'
+import { passageSummary, pauseWords } from './passage-words.ts'
 import type { PassageView } from './passage-view.ts'
 
 const water = 200
@@ -31,8 +31,14 @@ export function PassageCase({
   const [frame, width] = useWidth<HTMLDivElement>(1128)
   const scale = dayScale(from, until, width)
   const course = layPassage(view, scale, courseY, 'case')
-  const labels = layCaseLabels(view, course.marks, courseY, width, course.nowX, (day) =>
-    passageWords.dayNumber({ day }),
+  const labels = layCaseLabels(
+    view,
+    course.marks,
+    courseY,
+    width,
+    course.nowX,
+    (day) => passageWords.dayNumber({ day }),
+    pauseWords(course, caseHalf),
   )
   const words = [
     ...course.oldLegs.flatMap((old, i) => oldLegWords(old, i === 0, scale)),

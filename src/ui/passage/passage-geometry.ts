@@ -51,6 +51,8 @@ export interface CourseGeometry {
 }
 
 const mergeWithin = 10
+/** Half the height of the upright ends of a pause in the drawing of a case. */
+export const caseHalf = 7
 /** About how wide a letter of the narrow 11 px text is. */
 export const letterPx = 5.4
 

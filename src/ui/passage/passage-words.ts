@@ -2,7 +2,7 @@ import { passageWords } from '../../../shared/messages/passage.ts'
 import type { StepState } from '../step-mark.tsx'
 import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import { longDay, shortDay } from '../day-words.ts'
-import type { CourseMark } from './passage-geometry.ts'
+import type { CourseGeometry, CourseMark, CourseText } from './passage-geometry.ts'
 import type { PassageFix, PassageView } from './passage-view.ts'
 
 /** A state in words. */
@@ -14,6 +14,19 @@ export function stateWords(state: StepState): string {
     overdue: passageWords.overdue,
     failed: passageWords.failed,
   }[state]
+}
+
+/** The words over each pause of the course, above its upright ends. */
+export function pauseWords(
+  { pauses, y }: Pick<CourseGeometry, 'pauses' | 'y'>,
+  half: number,
+): Pick<CourseText, 'x' | 'y' | 'text' | 'anchor'>[] {
+  return pauses.map(({ x1, x2, days }) => ({
+    x: (x1 + x2) / 2,
+    y: y - half - 5,
+    text: passageWords.paused({ days }),
+    anchor: 'middle',
+  }))
 }
 
 /** "skin scrape, day 19, Thu 14 May, due today" */

@@ -2,13 +2,19 @@ import { describe, expect, it, vi } from 'vitest'
 import { coastPath } from '../../../src/ui/passage/coast.ts'
 import { dayScale } from '../../../src/ui/passage/day-scale.ts'
 import { layCaseLabels } from '../../../src/ui/passage/case-labels.ts'
-import { harbourLines, labelWords, oldLegWords, wholeOf } from '../../../src/ui/passage/case-words.ts'
+import {
+  harbourLines,
+  labelWords,
+  oldLegWords,
+  soundings,
+  wholeOf,
+} from '../../../src/ui/passage/case-words.ts'
 import { nowLinePieces } from '../../../src/ui/passage/now-line.ts'
-import { layPassage, textBox } from '../../../src/ui/passage/passage-geometry.ts'
+import { caseHalf, layPassage, overlap, textBox } from '../../../src/ui/passage/passage-geometry.ts'
 import { PassageBoard } from '../../../src/ui/passage/passage-board.tsx'
 import { PassageCase } from '../../../src/ui/passage/passage-case.tsx'
 import { PassageTable } from '../../../src/ui/passage/passage-table.tsx'
-import { passageSummary } from '../../../src/ui/passage/passage-words.ts'
+import { passageSummary, pauseWords } from '../../../src/ui/passage/passage-words.ts'
 import type { PassageFix, PassageLeg, PassageView } from '../../../src/ui/passage/passage-view.ts'
 import { rulerDates } from '../../../src/ui/day-ruler.tsx'
 import type { StepState } from '../../../src/ui/step-mark.tsx'
@@ -201,6 +207,37 @@ describe('the geometry', () => {
     for (const { text, y } of onLine)
       expect([text, pieces.filter(({ y1, y2 }) => y1 < y && y2 > y - 8)]).toEqual([text, []])
     expect(nowLinePieces(course.nowX, 0, 212, [])).toEqual([{ y1: 0, y2: 212 }])
+  })
+
+  it('never lets two counts read as one number, nor a label run into the words over a pause', () => {
+    const width = 358
+    const scale = dayScale('2026-04-06', '2026-06-02', width)
+    const counts = [
+      { on: '2026-04-25', animals: '22' },
+      { on: '2026-04-26', animals: '21' },
+      { on: '2026-05-10', animals: '20' },
+    ]
+    const pauses = [{ from: '2026-05-02', until: '2026-05-03' }]
+    const fixes = ['04-25', '04-27', '04-29', '05-01', '05-04'].map((day) =>
+      fix(`2026-${day}`, 'failed', 'hands-on'),
+    )
+    const view = ray({ legs: [leg('2026-04-25', fixes, { counts, pauses })] })
+    const course = layPassage(view, scale, 136, 'case')
+    const over = pauseWords(course, caseHalf)
+    expect(over.map(({ text }) => text)).toEqual([expect.stringMatching(/^paused 1.day$/)])
+    const labels = layCaseLabels(
+      view,
+      course.marks,
+      136,
+      width,
+      course.nowX,
+      (day) => `day ${String(day)}`,
+      over,
+    )
+    expect(labels.length).toBeGreaterThan(1)
+    for (const label of labelWords(labels))
+      for (const words of over) expect(overlap(textBox(label), textBox(words)), label.text).toBe(false)
+    expect(soundings(view, scale, [], 136).map(({ text }) => text)).toEqual(['21', '20'])
   })
 })
 
