@@ -1,6 +1,5 @@
 import { AnchorMark } from '../empty-harbour.tsx'
 import { StepMark } from '../step-mark.tsx'
-import { passageWords } from '../../../shared/messages/passage.ts'
 import { classNames } from '../class-names.ts'
 import { caseHalf } from './passage-geometry.ts'
 import type { CourseGeometry, CourseMark, CourseText, PassageSize } from './passage-geometry.ts'
