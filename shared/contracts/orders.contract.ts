@@ -51,7 +51,10 @@ export const OrderRow = z.object({
   enclosureName: z.string().describe('Name of the enclosure'),
   agent: z.enum(agentCodes).nullable().describe('Drug; null while none is chosen'),
   problem: z.string().describe('Condition treated'),
-  amountText: z.string().nullable().describe('Signed amount'),
+  amountText: z
+    .string()
+    .nullable()
+    .describe('Signed amount; left out while a second person has to work it out blind'),
   targetText: z.string().nullable().describe('Signed target'),
   startsAt: Instant.nullable().describe('First dose'),
   signedBy: z.string().nullable().describe('Signer'),
@@ -95,6 +98,9 @@ export const SignedVersion = z.object({
 })
 
 export const Order = OrderRow.extend({
+  amountsWithheld: z
+    .boolean()
+    .describe('The amount and its working are left out: the person who asks may be the blind second person'),
   version: z.int().describe('Version for saving the draft'),
   draft: BathOrderFields.nullable().describe('The draft, where there is one'),
   createdBy: z.string().describe('Who wrote it first'),
@@ -146,6 +152,12 @@ export const getOrder = contract({
   action: 'order.read',
   summary: 'One order with its signed versions, each checked now',
   params: orderParams,
+  query: z.strictObject({
+    amounts: z
+      .enum(['yes'])
+      .optional()
+      .describe('Show the amount too; whoever asks for it is no blind second person any more'),
+  }),
   reply: { 200: Order },
   problems: ['not-found'],
 })

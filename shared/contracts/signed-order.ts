@@ -41,7 +41,9 @@ export const SignedBathOrder = z.object({
   fields: z.object(BathOrderFields.shape).describe('The order as entered'),
   targetText: z.string().describe('Target as written'),
   basisText: z.string().describe('What the target is of'),
-  amount: OrderAmount.describe('Amount of each dose'),
+  amount: OrderAmount.nullable().describe(
+    'Amount of each dose; left out for whoever may be the blind second person',
+  ),
   working: z.array(SaidLine).describe('Working of the amount'),
   cautions: z.array(SaidCaution).describe('Cautions at signing'),
   conditions: z.array(SaidCondition).describe('What has to be true before each dose'),

@@ -25,6 +25,9 @@ export const doseWords = defineMessages({
     `The volume has moved by ${p.percent} since the signature; the order allows ${p.allowed}. A veterinarian amends the order.`,
   amountMoved: (p: { now: string; signed: string; allowed: string }) =>
     `${p.now} is worked out now and ${p.signed} was signed, though the volume has hardly moved; the order allows ${p.allowed}. Somebody changed the strength of the product or another figure. A veterinarian looks, and amends the order.`,
+  amountMovedBlind:
+    'The amount worked out now is not the one signed, though the volume has hardly moved. Somebody changed the strength of the product or another figure. A veterinarian looks, and amends the order.',
+  amountDiffersBlind: 'The amount is not the one worked out.',
   secondMissing: 'Another person has to calculate the amount without seeing yours.',
   secondDisagrees: 'The two calculations do not agree. Both begin again from the label.',
   firstMissing: 'Ask the first person to calculate.',

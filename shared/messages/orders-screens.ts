@@ -32,6 +32,7 @@ export const orderListWords = defineMessages({
   signed: 'Signed',
   noDrug: 'no drug chosen yet',
   noAmount: 'not signed yet',
+  amountWithheld: 'left out: calculated twice',
   noStart: 'not planned yet',
   notSigned: 'not signed',
   version: (p: { n: number }) => `version ${String(p.n)}`,
@@ -129,6 +130,9 @@ export const orderViewWords = defineMessages({
   cautionsAtSigning: 'as they stood at the signature',
   noCautions: 'No caution fired.',
   secondPerson: 'Asks for a second calculation by another person.',
+  amountWithheld:
+    'The amount is left out here: another person than the first works it out blind before each dose, and that may be you. Whoever looks at it is remembered.',
+  showAmount: 'I do not calculate second: show the amount',
   overridden: (p: { name: string; reason: string }) => `Overridden by ${p.name}, reason: ${p.reason}`,
   wasRead: (p: { name: string }) => `Read by ${p.name}`,
   sources: 'Where this comes from',

@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { aFormalinHouse } from '../builders/a-bath.ts'
+import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
 import { startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
@@ -65,6 +65,43 @@ describe('a second calculation is blind', () => {
       })
     },
   )
+
+  it('so the order names no amount to whoever may make it, until they ask for it and are remembered', async () => {
+    const number = await house.signedBath(bath)
+    const url = `/api/orders/${number}`
+    const sent = (body: object) => JSON.stringify(body).replaceAll('\u00a0', ' ')
+    const shows = /218(\.1\d*)? ?mL|"218"|218\.1/
+    for (const by of [house.second, await api.as('keeper')]) {
+      const shown = (await by.agent.get(url).expect(200)).body
+      expect(shown).toMatchObject({ amountsWithheld: true, amountText: null })
+      expect(shown.versions[0].content).toMatchObject({ amount: null, working: [], facts: null })
+      expect(sent(shown)).not.toMatch(shows)
+      expect(sent((await by.agent.get(`/api/orders?q=${number}`)).body)).not.toMatch(shows)
+      expect((await by.agent.get(`/api/orders.csv?q=${number}`)).text).not.toMatch(shows)
+      expect(sent(await blindSheet(number, by))).not.toMatch(shows)
+    }
+    // whoever signed it has seen it
+    const signer = (await (await api.as('veterinarian')).agent.get(url).expect(200)).body
+    expect(signer).toMatchObject({
+      amountsWithheld: false,
+      versions: [{ content: { amount: { measured: bathAmount } } }],
+    })
+
+    await house.freshWater(bath)
+    await house.calculateFirst(number).expect(201)
+    const asked = (await house.second.agent.get(`${url}?amounts=yes`).expect(200)).body
+    expect(asked).toMatchObject({ amountsWithheld: false, amountText: '218\u00a0mL' })
+    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
+    expect((await house.second.agent.get(url).expect(200)).body.amountsWithheld).toBe(false)
+    // a wrong amount typed at the tank is no way to be told the right one
+    const guess = await house.give(number, { amount: { value: '1', unit: 'mL' } })
+    expect([guess.status, sent(guess.body).match(shows)]).toEqual([409, null])
+    // paper shows it too
+    const keeper = await api.as('keeper')
+    await keeper.agent.get(`${url}/print`).expect(200)
+    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+  })
 
   it('by whoever never made a first one, also when another worked it out again since', async () => {
     const number = await aBathToCalculate()

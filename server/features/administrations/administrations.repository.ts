@@ -1,5 +1,4 @@
 import { insertOnce } from '../../platform/database/rows.ts'
-import { noteWritten } from '../../platform/database/written-rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { DoseOverrideRow } from './dose-override.entity.ts'
 import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
@@ -44,20 +43,6 @@ export async function hasEnded(tx: Tx, doseId: string): Promise<boolean> {
     'SELECT 1 FROM live_bath_stops s WHERE s.dose_id = $1 LIMIT 1',
     [doseId],
   )
-  return rows.length > 0
-}
-
-/** Notes once that a person was shown the amount; true when it is new. */
-export async function insertSeen(
-  tx: Tx,
-  row: { id: string; orderVersionId: string; doseKey: string; personId: string },
-): Promise<boolean> {
-  const rows: unknown[] = await tx.manager.query(
-    `INSERT INTO dose_amounts_seen (id, order_version_id, dose_key, person_id, recorded_at)
-     VALUES ($1, $2, $3, $4, $5) ON CONFLICT ON CONSTRAINT uq_dose_amounts_seen_person DO NOTHING RETURNING id`,
-    [row.id, row.orderVersionId, row.doseKey, row.personId, tx.at],
-  )
-  if (rows.length > 0) noteWritten(tx.manager.queryRunner, 'dose_amounts_seen', row.id)
   return rows.length > 0
 }
 

@@ -28,8 +28,8 @@ import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
 import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
 import type { LotNamed } from './lot-of-order.ts'
-import { isAmountNow, obstacles } from './judge-dose.ts'
-import { firstOf, secondOf } from './second-person.ts'
+import { isAmountNow, needsSecond, obstacles } from './judge-dose.ts'
+import { firstOf, secondOf, secondStands } from './second-person.ts'
 import { concentrationGiven, exceptionsOf, judgeAmount, marksOfCalculations, textOf } from './judge-record.ts'
 import type { Exception } from './judge-record.ts'
 
@@ -156,7 +156,11 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const why = obstacles(situation, calculations)
         const measured = situation.judgement?.dose?.measured
         if (measured && !isAmountNow(situation, amount))
-          why.push(doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }))
+          why.push(
+            needsSecond(situation) && !secondStands(calculations)
+              ? doseWords.amountDiffersBlind
+              : doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }),
+          )
         const first = firstOf(calculations)
         if (first && first.lot_id !== given.lotId) why.push(doseWords.secondOutdated)
         if (why.length > 0) throw new Problem('dose-not-possible', { detail: why.join(' '), extra: { why } })

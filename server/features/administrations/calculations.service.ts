@@ -6,6 +6,7 @@ import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
+import { insertSeen } from '../orders/index.ts'
 import * as repository from './administrations.repository.ts'
 import { compareCalculations, comparedWith } from './compare-calculations.ts'
 import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
@@ -29,7 +30,7 @@ export function createCalculations(parts: AdministrationsParts) {
       await parts.transactions.inTransaction(context, async (tx) => {
         const { orderVersionId, doseKey } = seen
         const row = { id: parts.ids.next(), orderVersionId, doseKey, personId: personOf(tx) }
-        if (await repository.insertSeen(tx, row))
+        if (await insertSeen(tx, row))
           tx.audit({
             action: 'dose.see-amount',
             subject: { kind: 'order', id: seen.order.id, label: seen.order.number },

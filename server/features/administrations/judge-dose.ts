@@ -106,8 +106,16 @@ function amountMoved({ content, judgement }: DoseSituation): boolean {
   return now.unit !== unroundedUnit || !moved.ok || !moved.value.within
 }
 
-/** Everything that stands in the way of giving the dose now, in words. */
-export function obstacles(situation: DoseSituation, calculations: Calculations): string[] {
+/**
+ * Everything that stands in the way of giving the dose now, in words.
+ *
+ * @param hide without any amount, for the person who calculates a second time
+ */
+export function obstacles(
+  situation: DoseSituation,
+  calculations: Calculations,
+  { hide }: { hide: boolean } = { hide: false },
+): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
   if (!situation.readable) return [doseWords.unreadable]
   const why: string[] = []
@@ -138,6 +146,7 @@ export function obstacles(situation: DoseSituation, calculations: Calculations):
         allowed: formatDose(content.fields.allowedVolumeDriftPercent, 'percent').text,
       }),
     )
+  else if (amountMoved(situation) && hide) why.push(doseWords.amountMovedBlind)
   else if (amountMoved(situation))
     why.push(
       doseWords.amountMoved({

@@ -267,7 +267,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
   const hideLot = hide && first !== undefined
   const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
   const calendar = presentCalendar(situation.plan, records, course, now)
-  const why = obstacles(situation, calculations)
+  const why = obstacles(situation, calculations, { hide })
   return {
     number: content.number,
     versionNo: content.versionNo,

@@ -13,6 +13,7 @@ import type { Formulary } from '../formulary/index.ts'
 import type { TreatmentsService } from '../quarantine/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { Water } from '../water/index.ts'
+import { createAmountsSeen } from './amounts-seen.service.ts'
 import { createBathFactsReader } from './bath-facts.ts'
 import {
   AgentExperience,
@@ -30,6 +31,7 @@ import { createOrdersService } from './orders.service.ts'
 import { createOrderPrinter, orderPrintKind } from './print-order.ts'
 import { answerForOrderPrints } from './print-state.ts'
 
+export { insertSeen } from './amounts-seen.repository.ts'
 export { verifyOrders } from './verify-orders.ts'
 export { saidCautions } from './say-order.ts'
 export type { OrdersService } from './orders.service.ts'
@@ -79,7 +81,8 @@ export function createOrders(parts: OrdersOutside) {
     enclosureName: async (id) => (await placeReads.readEnclosure(dataSource, { id }))?.name ?? '',
   })
   const queries = createOrderQueries({ dataSource, signing, now })
-  const print = createOrderPrinter({ ...parts, documents: documents.service, queries })
+  const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
+  const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
@@ -101,7 +104,7 @@ export function createOrders(parts: OrdersOutside) {
     /** Orders with something to decide, and the plans of the open ones, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString()),
     answerForPrint,
-    routes: orderRoutes({ service, queries, situation, now, print }),
+    routes: orderRoutes({ service, queries, situation, now, noteAmountsSeen, print }),
   }
 }
 

@@ -2,7 +2,7 @@ import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
-import { plannedOf, presentOrderRow, signedContent } from './orders.present.ts'
+import { asksForSecond, plannedOf, presentOrderRow } from './orders.present.ts'
 import { readOrders } from './orders.reads.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
@@ -27,13 +27,6 @@ export function openOrders(rows: readonly OrderReadRow[], now: string) {
     const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
     return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
   })
-}
-
-/** Whether the signed text asks for a second calculation, at a caution or at a condition. */
-function asksForSecond(row: OrderReadRow): boolean {
-  const content = signedContent(row)
-  const said = [...(content?.cautions ?? []), ...(content?.conditions ?? [])]
-  return said.some(({ secondCalculation }) => secondCalculation)
 }
 
 export type OpenOrder = ReturnType<typeof openOrders>[number]

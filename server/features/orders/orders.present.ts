@@ -89,6 +89,26 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
   }
 }
 
+/** Whether the signed text asks for a second calculation, at a caution or at a condition. */
+export function asksForSecond(row: OrderReadRow): boolean {
+  const content = signedContent(row)
+  const said = [...(content?.cautions ?? []), ...(content?.conditions ?? [])]
+  return said.some(({ secondCalculation }) => secondCalculation)
+}
+
+/**
+ * The doses that are still to come of an order that asks for a second calculation: until each is recorded, its amount is
+ * for nobody who may be the one to calculate it blind.
+ */
+export function blindKeys(row: OrderReadRow, now: string): string[] {
+  const phase = orderPhase(standingOfRow(row), now)
+  const isOpen = phase === 'not-started' || phase === 'in-progress' || phase === 'held'
+  if (!isOpen || !asksForSecond(row)) return []
+  return plannedOf(row)
+    .map(({ key }) => key)
+    .filter((key) => !row.done_keys.includes(key))
+}
+
 export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
   const standing = standingOfRow(row)
   const phase = orderPhase(standing, now)
@@ -104,7 +124,7 @@ export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
     enclosureName: content?.enclosure.name ?? row.enclosure_name,
     agent: (content?.product.agent ?? row.agent) as OrderRow['agent'],
     problem: content?.fields.problem ?? draft?.problem ?? '',
-    amountText: content?.amount.text ?? null,
+    amountText: blindKeys(row, now).length > 0 ? null : (content?.amount.text ?? null),
     targetText: content?.targetText ?? null,
     startsAt: courseOf(row)?.startsAt ?? draft?.startsAt ?? null,
     signedBy: signedText(row)?.signedBy?.printedName ?? row.signed_by_name,

@@ -12,11 +12,12 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
+import { isBlindTo, withoutAmount } from './blind-order.ts'
 import { openOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
-import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
+import { blindKeys, plannedOf, presentOrderRow, readText, signedContent } from './orders.present.ts'
 import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
 import type { OrderReadRow, VersionReadRow } from './orders.reads.ts'
 import { missingLinks } from './signing-chain.ts'
@@ -112,8 +113,12 @@ export function createOrderQueries(parts: OrderQueriesParts) {
           ...(await readVersion(row, version)),
         })),
       )
+      const now = parts.now().toISOString()
+      const isBlind = isBlindTo(row, now, actor)
       return {
-        ...presentOrderRow(row, parts.now().toISOString()),
+        ...presentOrderRow(row, now),
+        amountText: isBlind ? null : (signedContent(row)?.amount.text ?? null),
+        amountsWithheld: isBlind,
         version: row.version,
         draft: row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields),
         createdBy: row.created_by_name ?? '',
@@ -121,7 +126,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         versions: sealed.map(({ versionNo, block, content }, i) => ({
           versionNo,
           signature: block,
-          content,
+          content: isBlind ? withoutAmount(content) : content,
           superseded: i > 0,
         })),
         events: events.map((event) => ({
@@ -144,6 +149,14 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         }),
         may: mayBe.filter((action) => decide(action, actor.roles).allowed),
       }
+    },
+
+    /** The doses whose amount somebody learns who is shown the order as it is; none where they may know it. */
+    async amountsToNote(number: string, actor: Actor) {
+      const row = await rowOf(number)
+      const now = parts.now().toISOString()
+      const keys = isBlindTo(row, now, actor) ? blindKeys(row, now) : []
+      return { orderId: row.id, versionId: row.version_id, keys }
     },
 
     idOf: async (number: string): Promise<string> => (await rowOf(number)).id,

@@ -3,6 +3,7 @@ import { csvReply } from '../../platform/http/csv-reply.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import type { NoteAmountsSeen } from './amounts-seen.service.ts'
 import { ordersCsvColumns } from './orders-csv.ts'
 import { readSituation, refuseUnfit } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
@@ -15,17 +16,22 @@ export interface OrderRouteParts {
   queries: OrderQueries
   situation: SituationParts
   now(): Date
+  noteAmountsSeen: NoteAmountsSeen
   /** The PDF of a signed version, and a note that it was printed. */
   print(number: string, version: number | undefined, actor: Actor, requestId: string): Promise<Uint8Array>
 }
 
-export function orderRoutes({ service, queries, situation, now, print }: OrderRouteParts): Route[] {
+export function orderRoutes(parts: OrderRouteParts): Route[] {
+  const { service, queries, situation, now, noteAmountsSeen, print } = parts
   return [
     route(contracts.listOrders, ({ query }) => queries.list(query)),
     route(contracts.listOrdersCsv, async ({ query }) =>
       csvReply('orders.csv', ordersCsvColumns, await queries.find(query)),
     ),
-    route(contracts.getOrder, ({ params, context }) => queries.order(params.number, context.actor)),
+    route(contracts.getOrder, async ({ params, query, context }) => {
+      if (query.amounts === 'yes') await noteAmountsSeen(context, params.number)
+      return queries.order(params.number, context.actor)
+    }),
     route(contracts.previewOrder, async ({ body, query }) => {
       await refuseUnfit(situation, body, now())
       // an order that is amended is not another order beside itself

@@ -6,6 +6,7 @@ import { drawable } from '../../platform/pdf/drawable.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { DocumentsService } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
+import type { NoteAmountsSeen } from './amounts-seen.service.ts'
 import { orderDocument } from './order-document.ts'
 import type { OrderQueries } from './orders.queries.ts'
 
@@ -18,6 +19,7 @@ export interface PrintParts {
   facility: FacilityService
   documents: DocumentsService
   queries: OrderQueries
+  noteAmountsSeen: NoteAmountsSeen
 }
 
 /** Prints a signed version: checked now, noted with its fingerprint so that the paper can be looked up again. */
@@ -40,6 +42,7 @@ export function createOrderPrinter(parts: PrintParts) {
       printedAt: parts.clock.now().toISOString(),
     })
     const bytes = await parts.pdf.renderPdf(model)
+    await parts.noteAmountsSeen({ actor, requestId }, number)
     await parts.transactions.inTransaction({ actor, requestId }, async (tx) => {
       await parts.documents.registerPrint(tx, {
         fingerprint: sealed.block.hash,

@@ -24,6 +24,7 @@ import { OrderHistory, OrderVersions } from './order-history.tsx'
 import { PhaseTag } from './phase-tag.tsx'
 import { SignedCautions } from './signed-cautions.tsx'
 import { BrokenRecord, OrderSignature } from './signature-state.tsx'
+import { WithheldAmount } from './withheld-amount.tsx'
 
 function Head({ order, more }: { order: Order; more: string }) {
   const { zone } = useMe().facility
@@ -160,9 +161,13 @@ export function SignedOrder({
                 ) : (
                   <p className="text-magenta t-strong">{words.notAsSigned}</p>
                 )}
-                <p>
-                  <DoseText text={content.amount.text} size="dose" />
-                </p>
+                {content.amount ? (
+                  <p>
+                    <DoseText text={content.amount.text} size="dose" />
+                  </p>
+                ) : (
+                  <WithheldAmount number={order.number} />
+                )}
                 <p className="dose-drug">
                   {content.product.establishedName}, {words.routeText}
                 </p>
@@ -178,7 +183,12 @@ export function SignedOrder({
               </div>
             </div>
             <div className="pane stack gap-5">
-              {record.allowed && running && next && !version.superseded && signature.state === 'intact' ? (
+              {content.amount &&
+              record.allowed &&
+              running &&
+              next &&
+              !version.superseded &&
+              signature.state === 'intact' ? (
                 <AmountsNow
                   number={order.number}
                   doseKey={next.key}
@@ -186,11 +196,13 @@ export function SignedOrder({
                   allowedPercent={content.fields.allowedVolumeDriftPercent}
                 />
               ) : null}
-              <section className="stack">
-                <h2 className="t-head">{words.working}</h2>
-                <OrderWorking lines={content.working} />
-                <AmountNotes amount={content.amount} division={content.fields.division} />
-              </section>
+              {content.amount ? (
+                <section className="stack">
+                  <h2 className="t-head">{words.working}</h2>
+                  <OrderWorking lines={content.working} />
+                  <AmountNotes amount={content.amount} division={content.fields.division} />
+                </section>
+              ) : null}
               {version.superseded ? null : (
                 <DoseCalendar order={order} zone={zone} now={now} sheets={record.allowed} />
               )}

@@ -108,7 +108,7 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
       heading: words.amount,
       cell: (row) =>
         row.amountText === null ? (
-          <span className="t-2">{words.noAmount}</span>
+          <span className="t-2">{row.versionNo === null ? words.noAmount : words.amountWithheld}</span>
         ) : (
           <>
             <DoseText text={row.amountText} size="strong" />

@@ -29,6 +29,10 @@ export const orderQuery = (number: string) =>
     queryFn: ({ signal }) => api(getOrder, { params: { number }, signal }),
   })
 
+/** The same with its amount, for whoever will not be the second person; the server remembers who asked. */
+export const showAmount = (number: string) =>
+  api(getOrder, { params: { number }, query: { amounts: 'yes' as const } })
+
 /** One planned dose judged by the water as it is now: where the recomputed amount comes from. */
 export const doseNowQuery = (number: string, key: string) =>
   queryOptions({

@@ -1,0 +1,34 @@
+import type { Transactions } from '../../platform/database/transactions.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import type { RequestContext } from '../../platform/http/request-context.ts'
+import type { Ids } from '../../platform/ids.ts'
+import { insertSeen } from './amounts-seen.repository.ts'
+import type { OrderQueries } from './orders.queries.ts'
+
+export type NoteAmountsSeen = (context: RequestContext, number: string) => Promise<void>
+
+/** Remembers that the order itself showed somebody the amount: they are not the blind second person of its doses to come. */
+export function createAmountsSeen(parts: {
+  transactions: Transactions
+  ids: Ids
+  queries: OrderQueries
+}): NoteAmountsSeen {
+  return async (context, number) => {
+    const { personId } = context.actor
+    if (personId === null) throw new Problem('not-signed-in')
+    const { orderId, versionId, keys } = await parts.queries.amountsToNote(number, context.actor)
+    if (versionId === null || keys.length === 0) return
+    await parts.transactions.inTransaction(context, async (tx) => {
+      const fresh: string[] = []
+      for (const doseKey of keys)
+        if (await insertSeen(tx, { id: parts.ids.next(), orderVersionId: versionId, doseKey, personId }))
+          fresh.push(doseKey)
+      if (fresh.length > 0)
+        tx.audit({
+          action: 'dose.see-amount',
+          subject: { kind: 'order', id: orderId, label: number },
+          after: { keys: fresh },
+        })
+    })
+  }
+}
