@@ -51,6 +51,7 @@ async function takeAll(theme, { width, height, columns }) {
     await page.goto(installation.url + address)
     await page.getByRole('heading').first().waitFor()
     await page.waitForLoadState('networkidle')
+    await page.locator('.skeleton').first().waitFor({ state: 'detached' })
     const file = `${sheet.name}-${width}-${theme}.png`
     await page.screenshot({ path: path.join(folder, file), fullPage: true })
     taken.push({ file, words: `${sheet.name} · ${sheet.as}` })
@@ -64,6 +65,8 @@ async function signedIn(name, theme, viewport) {
     viewport,
     hasTouch: viewport.width < 600,
     reducedMotion: 'reduce',
+    // what keeps sheets on a device loads all of them, for nothing here
+    serviceWorkers: 'block',
   })
   await context.addInitScript((choice) => localStorage.setItem('pratique.theme', choice), theme)
   const { emails, password } = installation.accounts()

@@ -76,6 +76,7 @@ async function open(page: Page, sheet: (typeof everySheet)[number]): Promise<str
   await page.goto(app.url + address)
   await page.getByRole('heading').first().waitFor()
   await page.waitForLoadState('networkidle')
+  await page.locator('.skeleton').first().waitFor({ state: 'detached' })
   return address
 }
 
