@@ -1,7 +1,8 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aCase } from '../builders/a-case.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
-import { aBathWater, aDraft, aProduct, bathFields, signDraft } from '../builders/an-order.ts'
+import { anEnclosure, aValve } from '../builders/a-water.ts'
+import { aBathWater, aDraft, aProduct, aSchool, bathFields, signDraft } from '../builders/an-order.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -217,5 +218,71 @@ describe('the clock of a case on treated water', () => {
       [order],
     )
     expect(mine).toEqual([{ number: other.number }])
+  })
+})
+
+describe('what an agent leaves in water that is parted later', () => {
+  it('is known through a valve that was shut since, until it is out; what never came through is not', async () => {
+    const dosed = await aBathWater(api, 'QT-13')
+    const fish = await aSchool(api, dosed.id, 13)
+    const prolonged = (enclosureId: string, animalIds: string[]) =>
+      bathFields({
+        enclosureId,
+        animalIds,
+        productId: praziquantel.id,
+        lotId: praziquantel.lotId,
+        startsAt: api.clock.now().toISOString(),
+      })
+    const signed = () => anOrder(prolonged(dosed.id, [fish.id]))
+    const given = (number: string, happenedAt: string) =>
+      record(number, '1', happenedAt, {
+        amount: { value: '4.36', unit: 'g' },
+        lotId: praziquantel.lotId,
+      })
+    // both before there is a valve that the volume was not determined with
+    const first = await signed()
+    const second = await signed()
+    const beside = await anEnclosure(api, 'QT-14')
+    const valve = await aValve(api, 'V-14', [dosed.waterBodyId, beside.waterBodyId], false)
+    const tech = await api.as('technician')
+    const turn = (open: boolean, happenedAt: string) =>
+      tech.agent
+        .post(`/api/connections/${valve}/states`)
+        .send({ id: api.nextId(), open, happenedAt })
+        .expect(201)
+    const here = async () => {
+      const { agent } = await api.as('veterinarian')
+      const { body } = await agent.post('/api/order-previews').send(prolonged(beside.id, [])).expect(200)
+      return body.cautions
+        .filter(({ ruleId }: { ruleId: string }) => ruleId === 'R29')
+        .map(({ code }: { code: string }) => code)
+    }
+    expect(await here()).toEqual([])
+    // given while the valve was shut, and never let through
+    const alone = await given(first, '2026-12-01T12:00:00Z')
+    expect(await here()).toEqual([])
+    await end(alone, '2026-12-01T13:00:00Z')
+    const through = await given(second, '2026-12-01T14:00:00Z')
+    await turn(true, '2026-12-01T15:00:00Z')
+    await turn(false, '2026-12-01T16:00:00Z')
+    expect(await here()).toEqual(['same-agent-together'])
+    // taken out of the one water after the two were parted: it is in the other still
+    await end(through, '2026-12-01T17:00:00Z')
+    expect(await here()).toEqual(['same-agent-together'])
+    // that nobody can record, so it is remembered for 30 days
+    api.clock.set(new Date('2026-12-31T13:59:00Z'))
+    expect(await here()).toEqual(['same-agent-together'])
+    api.clock.set(new Date('2026-12-31T14:01:00Z'))
+    expect(await here()).toEqual([])
+    // taken out of both while they were joined
+    api.clock.set(testDay)
+    await end(await given(second, '2026-12-01T14:30:00Z'), '2026-12-01T15:30:00Z')
+    const vet = await api.as('veterinarian')
+    await vet.agent
+      .post(`/api/dose-records/dose/${through}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'written twice' })
+      .expect(200)
+    expect(await here()).toEqual([])
   })
 })

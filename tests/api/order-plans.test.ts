@@ -1,5 +1,4 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { anEnclosure, aValve } from '../builders/a-water.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import {
   aBathWater,
@@ -178,53 +177,6 @@ describe('the plan of an order', () => {
       .expect(201)
     expect(await sheet('3')).toMatchObject({ found: 'warning dose-on-dose' })
     expect((await sheet('3')).why).not.toContain('of this order')
-  })
-
-  it('knows what came through a valve that was shut since, until it is out, and what did not', async () => {
-    const dosed = await aBathWater(api, 'QT-13')
-    const fish = await aSchool(api, dosed.id, 13)
-    const signed = async () => {
-      const draft = await aDraft(api, praziFields({ enclosureId: dosed.id, animalIds: [fish.id] }))
-      expect((await signDraft(api, draft)).status).toBe(201)
-      return draft.number
-    }
-    // both before there is a valve that the volume was not determined with
-    const first = await signed()
-    const second = await signed()
-    const beside = await anEnclosure(api, 'QT-14')
-    const valve = await aValve(api, 'V-14', [dosed.waterBodyId, beside.waterBodyId], false)
-    const turn = async (open: boolean, happenedAt: string) => {
-      const { agent } = await api.as('technician')
-      await agent
-        .post(`/api/connections/${valve}/states`)
-        .send({ id: api.nextId(), open, happenedAt })
-        .expect(201)
-    }
-    const here = async () => {
-      const { agent } = await api.as('veterinarian')
-      const fields = praziFields({ enclosureId: beside.id, animalIds: [] })
-      const { cautions } = (await agent.post('/api/order-previews').send(fields).expect(200)).body
-      return cautions
-        .filter(({ ruleId }: { ruleId: string }) => ruleId === 'R29')
-        .map(({ code }: { code: string }) => code)
-    }
-    expect(await here()).toEqual([])
-    // given while the valve was shut, and never let through
-    const alone = await record(first, '1', '2026-12-01T12:00:00Z')
-    expect(await here()).toEqual([])
-    const tech = await api.as('technician')
-    const out = (doseId: string, happenedAt: string) =>
-      tech.agent
-        .post(`/api/doses/${doseId}/stop`)
-        .send({ id: api.nextId(), cause: 'time-up', happenedAt, rescue: 'carbon on' })
-        .expect(201)
-    await out(alone, '2026-12-01T13:00:00Z')
-    const through = await record(second, '1', '2026-12-01T14:00:00Z')
-    await turn(true, '2026-12-01T15:00:00Z')
-    await turn(false, '2026-12-01T16:00:00Z')
-    expect(await here()).toEqual(['same-agent-together'])
-    await out(through, '2026-12-01T17:00:00Z')
-    expect(await here()).toEqual([])
   })
 
   it('refuses a plan over years, and asks about a long one', async () => {

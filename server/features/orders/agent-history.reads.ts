@@ -59,12 +59,12 @@ export interface CarriedAgentRow {
   agent: string
   number: string
   contact_minutes: number | null
-  /** When those doses went in, in time order, and when each was over or the agent out of the water. */
-  given: { at: string; ended: string | null }[]
+  /** When those doses went in, in time order, into which enclosure, and when its bath was over or the agent out of it. */
+  given: { at: string; ended: string | null; enclosureId: string }[]
 }
 
 /** How long an agent that is out of the water is remembered. Project default: longer than any rule looks back. */
-const daysRemembered = 30
+export const daysRemembered = 30
 
 /** The first dose, anywhere, whose agent may still be in some water or was within the last days; null when there is none. */
 export async function readFirstDoseThatMatters(db: Db, at: Date): Promise<Date | null> {
@@ -101,7 +101,7 @@ export function readCarriedAgents(
 ): Promise<CarriedAgentRow[]> {
   return db.query(
     `SELECT v.agent, o.number, v.contact_minutes,
-            json_agg(json_build_object('at', d.happened_at, 'ended',
+            json_agg(json_build_object('at', d.happened_at, 'enclosureId', v.enclosure_id, 'ended',
                        (SELECT min(s.happened_at) FROM live_bath_stops s
                          WHERE s.dose_id = d.id AND s.happened_at <= $2)) ORDER BY d.happened_at) AS given
        FROM ${dosesFromSources}

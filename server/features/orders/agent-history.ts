@@ -1,10 +1,12 @@
 import type { AgentUse, CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
 import { known, unknown } from '../../../shared/domain/cautions/fact.ts'
+import type { WaterSourceSpell } from '../../../shared/domain/connections/list-water-sources.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import { doseWindow } from '../../../shared/domain/schedule/dose-window.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { WaterQuestions } from '../water/index.ts'
 import {
+  daysRemembered,
   readAgentUses,
   readCarriedAgents,
   readFirstDoseThatMatters,
@@ -48,7 +50,7 @@ export async function readAgentHistory(
     ordered.some((one) => one.number === row.number && one.agent === row.agent)
   const uses = [
     ...ordered.map((row) => orderedUse(row, at)),
-    ...carried.filter((row) => !isListed(row)).map((row) => carriedUse(row, at)),
+    ...carried.filter((row) => !isListed(row)).map((row) => carriedUse(row, sources, at)),
   ]
   return {
     agentUses: known(uses, at.toISOString(), 'the orders'),
@@ -59,12 +61,23 @@ export async function readAgentHistory(
   }
 }
 
-/** What came with the water, from an order for another one: nothing more of it is to come. */
-function carriedUse(row: CarriedAgentRow, at: Date): AgentUse {
+/** Whether what was done to the water of an enclosure at an instant was done to the water asked about as well. */
+function reachesHere(sources: readonly WaterSourceSpell[], enclosureId: string, at: number): boolean {
+  const spell = sources.findLast(({ from }) => Date.parse(from) <= at)
+  return spell?.enclosureIds.includes(enclosureId) ?? false
+}
+
+/**
+ * What came with the water, from an order for another one: nothing more of it is to come. An end that was recorded when
+ * the two waters were parted already took nothing out of this one, where nobody records one: it is remembered for days.
+ */
+function carriedUse(row: CarriedAgentRow, sources: readonly WaterSourceSpell[], at: Date): AgentUse {
   const { contact_minutes: minutes, given } = row
   const ends = given.map((dose) => {
-    if (dose.ended !== null) return Date.parse(dose.ended)
-    return minutes === null ? null : Date.parse(dose.at) + minutes * 60_000
+    const begun = Date.parse(dose.at)
+    const planned = minutes === null ? null : begun + minutes * 60_000
+    const end = dose.ended === null ? planned : Date.parse(dose.ended)
+    return end === null || reachesHere(sources, dose.enclosureId, end) ? end : begun + daysRemembered * dayMs
   })
   const until = ends.includes(null) ? null : new Date(Math.max(...ends.map((end) => end ?? 0)))
   return {
