@@ -340,6 +340,14 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await page.getByText(/^Struck out by Test keeper/).waitFor()
     await page.getByText('“typed one digit too many”').waitFor()
     await expectSound(page, 'bath-struck-390')
+
+    const vet = await signedIn('veterinarian', phone, `/orders/${await aSignedBath()}/sheet?dose=1`)
+    await vet.getByRole('button', { name: 'Override for this dose' }).first().click()
+    await vet.getByRole('dialog').getByLabel('Why it is given all the same').fill('air is on hard')
+    await vet.getByRole('dialog').getByLabel('Your password').fill(password)
+    await expectSound(vet, 'bath-override-390')
+    await vet.getByRole('dialog').getByRole('button', { name: 'Sign the override' }).click()
+    await vet.getByRole('heading', { name: 'Overridden for this dose' }).waitFor()
   })
 
   it('of an agent left in the water asks when it is out, from which quarantine counts', async () => {
