@@ -1,3 +1,5 @@
+import { useEffect, useRef } from 'react'
+import { useQueryClient } from '@tanstack/react-query'
 import { CloudOff } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
@@ -6,6 +8,7 @@ import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { useUnsent } from '../../lib/stop-entries.ts'
 import { Banner } from '../../ui/banner.tsx'
+import { dosesKey } from './queries.ts'
 
 /** A stop or a hold that was entered on this device and is not with the server: said until it is. */
 export function UnsentActs({
@@ -21,6 +24,8 @@ export function UnsentActs({
 }) {
   const stop = useUnsent({ doseId })
   const hold = useUnsent({ number })
+  useReadAgainOnceSent(stop?.id ?? null)
+  useReadAgainOnceSent(hold?.id ?? null)
   const at = (item: OutboxItem) => ({ at: sayMoment(item.madeAt, zone, now) })
   return (
     <>
@@ -32,6 +37,17 @@ export function UnsentActs({
       )}
     </>
   )
+}
+
+/** A stop and a hold are sent one after the other; the sheet may have been read in between, and is read again after each. */
+function useReadAgainOnceSent(id: string | null): void {
+  const client = useQueryClient()
+  const before = useRef(id)
+  useEffect(() => {
+    if (before.current !== null && before.current !== id)
+      void client.invalidateQueries({ queryKey: dosesKey })
+    before.current = id
+  }, [client, id])
 }
 
 function UnsentAct({ item, heading, body }: { item: OutboxItem; heading: string; body: string }) {
