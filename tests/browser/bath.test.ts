@@ -11,8 +11,8 @@ import {
 } from '../builders/an-order.ts'
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import { password } from '../support/api.ts'
-import { expectAccessible } from '../support/axe.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -54,15 +54,11 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [
-  /401 \(Unauthorized\)/,
-  /403 \(Forbidden\) \(.*\/second-calculation/,
-  /409 \(Conflict\)/,
-  /422 \(Unprocessable/,
-  /ERR_INTERNET_DISCONNECTED/,
-]
-const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, keepsSheets: true, expectedErrors }
+const expectedErrors = [...refusals(409, 422), /ERR_INTERNET_DISCONNECTED/]
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, keepsSheets: true, expectedErrors }
+const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
+  openSignedIn(browser, app, who, at, size)
 
 /** A formalin bath of 45 min at 100 µL/L, a hazard: 2,181.4 L × 100 µL/L = 218.14 mL, worked by hand. */
 async function aSignedBath(given: object = {}): Promise<string> {
@@ -96,29 +92,6 @@ const freshWater = () =>
     ph: ['8.1', 'pH'],
     alkalinity: ['2.4', 'meq/L'],
   })
-
-async function signedIn(email: string, size: typeof desk, at: string): Promise<Page> {
-  const { page } = await newSession(browser, size)
-  await page.goto(`${app.url}${at}`)
-  await page.getByRole('textbox', { name: 'E-mail' }).fill(`${email}@harrow-point.example`)
-  await page.getByRole('textbox', { name: 'Password' }).fill(password)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL((url) => url.pathname === at.replace(/\?.*/, ''))
-  return page
-}
-
-const picture = async (page: Page, name: string) => {
-  const folder = process.env['PRATIQUE_PICTURES']
-  if (folder) await page.screenshot({ path: `${folder}/${name}.png`, fullPage: true })
-}
-
-/** Accessible, and nothing sticks out at the side. */
-async function expectSound(page: Page, name: string): Promise<void> {
-  await picture(page, name)
-  await expectAccessible(page, name)
-  const [width, wanted] = await page.evaluate(() => [document.documentElement.scrollWidth, window.innerWidth])
-  expect(width, `${name}: width`).toBeLessThanOrEqual(wanted ?? 0)
-}
 
 /** Everything that the server sends to a page from now on. */
 function listen(page: Page): string[] {
@@ -163,7 +136,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await tech.getByText(/Water tested: oxygen within/).waitFor()
     const reading = tech.getByRole('link', { name: 'Enter a reading' }).first()
     expect(await reading.getAttribute('href')).toBe('/enclosures/QT-3/measure')
-    await expectSound(tech, 'bath-conditions-390')
+    await expectSound(tech, 'bath-conditions')
     await freshWater()
     await tech.reload()
 
@@ -176,7 +149,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).click()
     await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).waitFor({ state: 'detached' })
     await tech.getByText('A veterinarian, technician or keeper who is not you').waitFor()
-    await expectSound(tech, 'bath-first-390')
+    await expectSound(tech, 'bath-first')
 
     // the same person is no second person
     await tech.goto(`${app.url}${sheetAt}?dose=1&part=second`)
@@ -186,7 +159,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await tech
       .getByText(/you may repeat it yourself from \d\d:\d\d: read label, mark and container again/)
       .waitFor()
-    await expectSound(tech, 'bath-same-person-390')
+    await expectSound(tech, 'bath-same-person')
     // with nobody to be reached they read everything again, and not before the time is over
     await tech.getByRole('button', { name: 'Nobody else can be reached: I repeat it myself' }).click()
     await fillSecond(tech, '218')
@@ -202,12 +175,12 @@ describe('a bath at the tank', { timeout: patience }, () => {
     const amountField = other.getByRole('textbox', { name: /Amount that you work out/ })
     expect(await amountField.isDisabled()).toBe(true)
     expect(await other.getByRole('button', { name: 'Hold' }).count()).toBe(1)
-    await expectSound(other, 'bath-second-390')
+    await expectSound(other, 'bath-second')
     await fillSecond(other, '2180')
     await other.getByRole('button', { name: 'Compare with the first' }).click()
     await other.getByText('The two do not agree. Nothing is given.').waitFor()
     await other.getByText(/The amounts differ by more than 2/).waitFor()
-    await expectSound(other, 'bath-second-differs-390')
+    await expectSound(other, 'bath-second-differs')
     await other.getByText('Both begin again', { exact: true }).waitFor()
     expect(await amountField.count()).toBe(0)
     const seen = `${heard.join(' ')} ${await other.content()}`.replaceAll('2,180', '').replaceAll('2180', '')
@@ -216,7 +189,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
 
     // both begin again: the second waits until the first is there anew
     await tech.getByText('the two do not agree').waitFor()
-    await expectSound(tech, 'bath-first-differs-390')
+    await expectSound(tech, 'bath-first-differs')
     await tech.getByRole('button', { name: 'Begin again: work it out anew' }).click()
     await other.getByText('The first result is not on this screen.').waitFor()
     expect(await amountField.inputValue()).toBe('')
@@ -226,7 +199,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
 
     // what is weighed is typed, and a slip of ten is refused
     await tech.getByRole('textbox', { name: 'Weighed or measured' }).fill('2180')
-    await expectSound(tech, 'bath-give-390')
+    await expectSound(tech, 'bath-give')
     await tech.getByRole('button', { name: 'It is in the water: start the time' }).click()
     await tech.getByText(/has to be 218\s?mL/).waitFor()
     await tech.getByRole('textbox', { name: 'Weighed or measured' }).fill('218')
@@ -236,7 +209,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     const time = tech.getByRole('timer')
     await time.filter({ hasText: /^4[45]:\d\d$/ }).waitFor()
     await tech.getByText('Stop the bath if').waitFor()
-    await expectSound(tech, 'bath-running-390')
+    await expectSound(tech, 'bath-running')
     app.clock.set(later(20))
     await tech.reload()
     await time.filter({ hasText: /^2[56]:\d\d$/ }).waitFor()
@@ -254,7 +227,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
       .filter({ hasText: /over by \d:/ })
       .waitFor()
     await keeper.getByText('Take the animals out, or flush the water now.').first().waitFor()
-    await expectSound(keeper, 'bath-time-up-390')
+    await expectSound(keeper, 'bath-time-up')
     // without a signal, and after a reload: the time goes on, and the stop is kept with its own time
     await keeper.evaluate(async () => {
       await navigator.serviceWorker.ready
@@ -276,12 +249,12 @@ describe('a bath at the tank', { timeout: patience }, () => {
     const dialog = keeper.getByRole('alertdialog')
     await dialog.getByRole('textbox', { name: 'What was seen' }).fill('two on their side')
     await dialog.getByRole('textbox', { name: 'What was done for the animals' }).fill('flushed, air on full')
-    await expectSound(keeper, 'bath-stop-390')
+    await expectSound(keeper, 'bath-stop')
     expect(await keeper.getByLabel('Password').count()).toBe(0)
     await dialog.getByRole('button', { name: 'Stop it now' }).click()
     await keeper.getByText(/^Ended at 15:1\d: not sent yet/).waitFor()
     expect(await stop.count()).toBe(0)
-    await expectSound(keeper, 'bath-stop-unsent-390')
+    await expectSound(keeper, 'bath-stop-unsent')
     expect(await asTheServerHasIt(number)).toMatchObject({ state: 'running' })
     await keeper.getByRole('button', { name: 'Hold' }).click()
     await keeper.getByRole('dialog').getByRole('button', { name: 'Hold it now' }).click()
@@ -292,7 +265,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     expect(await keeper.getByText(/not sent yet/).count()).toBe(0)
     await keeper.getByText('Seen: two on their side').waitFor()
     await keeper.getByText('Done: flushed, air on full').waitFor()
-    await expectSound(keeper, 'bath-stopped-390')
+    await expectSound(keeper, 'bath-stopped')
   })
 
   it('is recorded afterwards with its own time, with what would have stopped it; held orders say so', async () => {
@@ -306,14 +279,14 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await dialog.getByLabel('When', { exact: true }).fill('2026-12-01T09:05')
     await dialog.getByLabel(/When the bath ended/).fill('2026-12-01T09:45')
     await dialog.getByRole('textbox', { name: 'In words' }).fill('before the day’s rounds')
-    await expectSound(page, 'bath-record-390')
+    await expectSound(page, 'bath-record')
     await dialog.getByRole('button', { name: 'Record it' }).click()
     await page.getByText('Recorded as given').waitFor()
     await page.getByText(/Test keeper, 09:05, entered 15:2\d/).waitFor()
     await page.getByText('Out of the bath at 09:45, Test keeper').waitFor()
     await page.getByText('For the veterinarian to review').waitFor()
     await page.getByText('The order was signed after this dose').waitFor()
-    await expectSound(page, 'bath-recorded-390')
+    await expectSound(page, 'bath-recorded')
 
     const held = await aSignedBath()
     await page.goto(`${app.url}/orders/${held}/sheet?dose=1`)
@@ -324,7 +297,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await page.getByText('fast breathing').waitFor()
     await page.getByText(/can still be recorded/).waitFor()
     expect(await page.getByRole('button', { name: 'Work it out with this lot' }).count()).toBe(0)
-    await expectSound(page, 'bath-held-390')
+    await expectSound(page, 'bath-held')
 
     // ten times too much is kept and marked; a slip of the hand is struck out and stays readable
     await page.getByRole('button', { name: 'Record what happened' }).click()
@@ -333,19 +306,19 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await dialog.getByRole('button', { name: 'Record it' }).click()
     await page.getByText('Another amount was given than was worked out').waitFor()
     await page.getByText(/That is about 10 times as much/).waitFor()
-    await expectSound(page, 'bath-tenfold-390')
+    await expectSound(page, 'bath-tenfold')
     await page.getByRole('button', { name: 'Strike out this record' }).click()
     await page.getByRole('textbox', { name: 'Why' }).fill('typed one digit too many')
     await page.getByRole('button', { name: 'Strike it out' }).click()
     await page.getByText(/^Struck out by Test keeper/).waitFor()
     await page.getByText('“typed one digit too many”').waitFor()
-    await expectSound(page, 'bath-struck-390')
+    await expectSound(page, 'bath-struck')
 
     const vet = await signedIn('veterinarian', phone, `/orders/${await aSignedBath()}/sheet?dose=1`)
     await vet.getByRole('button', { name: 'Override for this dose' }).first().click()
     await vet.getByRole('dialog').getByLabel('Why it is given all the same').fill('air is on hard')
     await vet.getByRole('dialog').getByLabel('Your password').fill(password)
-    await expectSound(vet, 'bath-override-390')
+    await expectSound(vet, 'bath-override')
     await vet.getByRole('dialog').getByRole('button', { name: 'Sign the override' }).click()
     await vet.getByRole('heading', { name: 'Overridden for this dose' }).waitFor()
   })
@@ -375,7 +348,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
       .expect(201)
     const page = await signedIn('keeper', phone, `/orders/${number}/sheet?dose=1`)
     await page.getByRole('heading', { name: 'The drug is in the water' }).waitFor()
-    await expectSound(page, 'bath-in-the-water-390')
+    await expectSound(page, 'bath-in-the-water')
     await page.getByRole('button', { name: 'The drug is out of the water' }).click()
     const dialog = page.getByRole('dialog')
     await dialog.getByRole('textbox', { name: 'How it was taken out' }).fill('carbon on, half changed')
@@ -391,7 +364,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     const page = await signedIn('veterinarian', desk, `/orders/${number}/sheet?dose=1`)
     await page.getByRole('navigation', { name: 'Doses of this order' }).waitFor()
     await page.getByText('The volume is the one of the signature.').waitFor()
-    await expectSound(page, 'bath-1440')
+    await expectSound(page, 'bath')
     const print = page.getByRole('link', { name: 'Bath sheet on paper' })
     expect(await print.getAttribute('href')).toBe(`/api/orders/${number}/doses/1/print`)
     await page.getByRole('link', { name: /^2, / }).click()

@@ -14,8 +14,8 @@ import {
 } from '../builders/an-order.ts'
 import { localMomentOf } from '../../src/lib/local-moment.ts'
 import { password } from '../support/api.ts'
-import { launchChromium, newSession } from '../support/chromium.ts'
-import { expectSound, picture, signIn } from '../support/journey.ts'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -117,20 +117,15 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [
-  /401 \(Unauthorized\)/,
-  /403 \(Forbidden\)/,
-  /409 \(Conflict\)/,
-  /422 \(Unprocessable/,
-]
-const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, expectedErrors }
+const expectedErrors = refusals(403, 409, 422)
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, expectedErrors }
 
 /** A date and time so many hours from now, as the facility's clock shows it. */
 const localIn = (hours: number) => localMomentOf(hoursFromNow(hours), 'America/Halifax')
 
-const signedIn = async (name: string, size: typeof desk, at: string): Promise<Page> =>
-  signIn((await newSession(browser, size)).page, app, name, at)
+const signedIn = (name: string, size: typeof desk, at: string): Promise<Page> =>
+  openSignedIn(browser, app, name, at, size)
 
 describe.each([desk, phone])('orders at $width px', (size) => {
   it('are listed, searched and filtered by the address', async () => {

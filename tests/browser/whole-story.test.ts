@@ -11,7 +11,7 @@ import { textOf } from '../pdf/support/poppler.ts'
 import { password } from '../support/api.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
 import type { BrowserSession } from '../support/chromium.ts'
-import { choose, picture, signIn } from '../support/journey.ts'
+import { choose, deskSize, phoneSize, picture, refusals, signIn } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -68,14 +68,9 @@ afterAll(async () => {
 })
 
 // who is signed in is asked first; without a signal every request fails
-const expectedErrors = [
-  /401 \(Unauthorized\)/,
-  /409 \(Conflict\)/,
-  /422 \(Unprocessable/,
-  /ERR_INTERNET_DISCONNECTED/,
-]
-const desk = { width: 1440, height: 900, expectedErrors }
-const phone = { width: 390, height: 844, keepsSheets: true, expectedErrors }
+const expectedErrors = [...refusals(409, 422), /ERR_INTERNET_DISCONNECTED/]
+const desk = { ...deskSize, expectedErrors }
+const phone = { ...phoneSize, keepsSheets: true, expectedErrors }
 
 async function at(size: typeof desk, name: string, address: string, daysLater = 0): Promise<BrowserSession> {
   const session = await newSession(browser, { ...size, daysLater })
