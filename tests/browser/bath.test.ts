@@ -54,7 +54,11 @@ afterAll(async () => {
   await app.stop()
 })
 
-const expectedErrors = [...refusals(409, 422), /ERR_INTERNET_DISCONNECTED/]
+const expectedErrors = [
+  ...refusals(409, 422),
+  /403 \(Forbidden\) \(.*\/second-calculation/,
+  /ERR_INTERNET_DISCONNECTED/,
+]
 const desk = { ...deskSize, expectedErrors }
 const phone = { ...phoneSize, keepsSheets: true, expectedErrors }
 const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
