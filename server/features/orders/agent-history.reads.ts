@@ -1,5 +1,6 @@
 import type { WaterSourceSpell } from '../../../shared/domain/connections/list-water-sources.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { happenedBy } from '../../platform/database/happened-by.ts'
 
 export interface AgentUseRow {
   agent: string
@@ -35,16 +36,16 @@ export function readAgentUses(
                       + v.contact_minutes * interval '1 minute' END AS ends_at,
             v.doses, v.interval_hours, v.contact_minutes,
             coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
-                       WHERE x.order_id = o.id AND d.happened_at <= $2), '{}') AS done_keys,
+                       WHERE x.order_id = o.id AND ${happenedBy('d', '$2')}), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
                                (SELECT max(s.happened_at) FROM live_bath_stops s
-                                 WHERE s.dose_id = d.id AND s.happened_at <= $2)))
+                                 WHERE s.dose_id = d.id AND ${happenedBy('s', '$2')})))
                         FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
-                       WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2), '[]') AS given,
+                       WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$2')}), '[]') AS given,
             (SELECT min(e.happened_at) FROM order_events e
-              WHERE e.order_id = o.id AND e.kind = 'discontinued' AND e.happened_at <= $2) AS discontinued_at,
+              WHERE e.order_id = o.id AND e.kind = 'discontinued' AND ${happenedBy('e', '$2')}) AS discontinued_at,
             (SELECT max(d.happened_at) FROM live_doses d JOIN order_versions w ON w.id = d.order_version_id
-              WHERE w.order_id = o.id AND d.kind IN ('given', 'recorded') AND d.happened_at <= $2) AS last_given_at
+              WHERE w.order_id = o.id AND d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$2')}) AS last_given_at
        FROM orders o
        JOIN order_versions v ON v.order_id = o.id
       WHERE v.enclosure_id = ANY($1) AND v.signed_at <= $2 AND ($3::uuid IS NULL OR o.id <> $3)
@@ -70,7 +71,7 @@ export const daysRemembered = 30
 export async function readFirstDoseThatMatters(db: Db, at: Date): Promise<Date | null> {
   const [row]: { first_at: Date | null }[] = await db.query(
     `SELECT min(d.happened_at) AS first_at FROM live_doses d
-      WHERE d.kind IN ('given', 'recorded') AND d.happened_at <= $1
+      WHERE d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$1')}
         AND NOT EXISTS (SELECT 1 FROM live_bath_stops s
                          WHERE s.dose_id = d.id AND s.happened_at <= $1::timestamptz - $2 * interval '1 day')`,
     [at, daysRemembered],
@@ -102,11 +103,11 @@ export function readCarriedAgents(
   return db.query(
     `SELECT v.agent, o.number, v.contact_minutes,
             json_agg(json_build_object('at', d.happened_at, 'enclosureId', v.enclosure_id, 'ended',
-                       (SELECT min(s.happened_at) FROM live_bath_stops s
-                         WHERE s.dose_id = d.id AND s.happened_at <= $2)) ORDER BY d.happened_at) AS given
+                       (SELECT max(s.happened_at) FROM live_bath_stops s
+                         WHERE s.dose_id = d.id AND ${happenedBy('s', '$2')})) ORDER BY d.happened_at) AS given
        FROM ${dosesFromSources}
        JOIN orders o ON o.id = v.order_id
-      WHERE d.happened_at <= $2 AND ($3::uuid IS NULL OR o.id <> $3)
+      WHERE ${happenedBy('d', '$2')} AND ($3::uuid IS NULL OR o.id <> $3)
       GROUP BY v.agent, o.number, v.contact_minutes`,
     [sourceRows(sources), at, exceptOrderId],
   )
@@ -122,7 +123,7 @@ export async function readGivenInLast24h(
   const [row]: { total: number | null; unclear: string }[] = await db.query(
     `SELECT sum(d.given_mg_per_l) AS total, count(*) FILTER (WHERE d.given_mg_per_l IS NULL) AS unclear
        FROM ${dosesFromSources}
-      WHERE v.agent = $2 AND d.happened_at <= $3 AND d.happened_at > $3 - interval '24 hours'`,
+      WHERE v.agent = $2 AND ${happenedBy('d', '$3')} AND d.happened_at > $3 - interval '24 hours'`,
     [sourceRows(sources), agent, at],
   )
   return { totalMgPerL: row?.total ?? 0, unclear: Number(row?.unclear ?? 0) > 0 }
@@ -134,7 +135,7 @@ export async function readExperiencedTaxa(db: Db, agent: string, taxonIds: reado
     `SELECT a.taxon_id FROM live_doses d
        JOIN order_versions v ON v.id = d.order_version_id
        JOIN order_version_animals a ON a.order_version_id = v.id
-      WHERE v.agent = $1 AND a.taxon_id = ANY($2) AND d.kind IN ('given', 'recorded') AND d.happened_at <= $3
+      WHERE v.agent = $1 AND a.taxon_id = ANY($2) AND d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$3')}
       UNION
      SELECT e.taxon_id FROM agent_experience e
       WHERE e.agent = $1 AND e.taxon_id = ANY($2) AND e.declared_at <= $3`,

@@ -14,7 +14,7 @@ export function readStandingHolds(db: Db): Promise<StandingHoldRow[]> {
        FROM (SELECT DISTINCT ON (e.order_id) e.order_id, e.kind, e.reason, e.happened_at, e.recorded_by
                FROM order_events e
               WHERE e.kind <> 'discontinued'
-              ORDER BY e.order_id, e.happened_at DESC, e.recorded_at DESC) l
+              ORDER BY e.order_id, e.recorded_at DESC, e.happened_at DESC) l
        LEFT JOIN people p ON p.id = l.recorded_by
       WHERE l.kind = 'held'`,
   )

@@ -141,7 +141,7 @@ export function CautionsNow({ sheet }: { sheet: BathSheet }) {
       <h2 className="t-head">{words.cautions}</h2>
       {cautions.map((caution) => (
         <CautionBlock
-          key={`${caution.ruleId} ${caution.code}`}
+          key={`${caution.ruleId} ${caution.text}`}
           level={caution.level}
           title={caution.title}
           answer={

@@ -41,7 +41,7 @@ function OpenStep({ step, sheet, lotId }: { step: Step; sheet: BathSheet; lotId:
         <WhereToResolve step={step} sheet={sheet} lotId={lotId} />
       )}
       {stopsOf(sheet, step).map((stop) => (
-        <OverrideAct key={stop.code} sheet={sheet} stop={stop} />
+        <OverrideAct key={stop.text} sheet={sheet} stop={stop} />
       ))}
     </span>
   )
@@ -52,9 +52,9 @@ const stopsOf = (sheet: BathSheet, step: Step) =>
   sheet.cautions.filter(({ ruleId, level }) => ruleId === step.ruleId && level === 'stop')
 
 function Overridden({ step, sheet }: { step: Step; sheet: BathSheet }) {
-  return stopsOf(sheet, step).map(({ code, overridden }) =>
+  return stopsOf(sheet, step).map(({ text, overridden }) =>
     overridden ? (
-      <span key={code} className="t-strong">
+      <span key={text} className="t-strong">
         {orderViewWords.overridden({ name: overridden.by, reason: overridden.reason })}
       </span>
     ) : null,
