@@ -68,16 +68,46 @@ describe('the list of sheets', () => {
 
 const people = [...new Set(everySheet.map((sheet) => sheet.as))]
 
-/** Opens a sheet and waits until it has come to rest; null when the practice data has nothing to show on it. */
-async function open(page: Page, sheet: (typeof everySheet)[number]): Promise<string | null> {
+/** Waits until nothing was asked of the server for half a second. Made before the page first opens anything. */
+function restOf(page: Page): () => Promise<void> {
+  let open = 0
+  let changedMs = performance.now()
+  const count = (step: number) => () => {
+    open += step
+    changedMs = performance.now()
+  }
+  page.on('request', count(1))
+  page.on('requestfinished', count(-1))
+  page.on('requestfailed', count(-1))
+  return async () => {
+    changedMs = performance.now()
+    while (open > 0 || performance.now() - changedMs < 500) await page.waitForTimeout(50)
+  }
+}
+
+/**
+ * Opens one sheet after another and waits until it has come to rest; null when the practice data has nothing to show on
+ * it. The first is loaded, and from there the page moves on as with its own links, which takes a third of the time.
+ */
+function opener(page: Page): (sheet: (typeof everySheet)[number]) => Promise<string | null> {
+  const rest = restOf(page)
   const get = async (address: string) => (await page.request.get(app.url + address)).json()
-  const address = await addressOf(sheet, get)
-  if (address === null) return null
-  await page.goto(app.url + address)
-  await page.getByRole('heading').first().waitFor()
-  await page.waitForLoadState('networkidle')
-  await page.locator('.skeleton').first().waitFor({ state: 'detached' })
-  return address
+  return async (sheet) => {
+    const address = await addressOf(sheet, get)
+    if (address === null) return null
+    if (page.url() === 'about:blank') await page.goto(app.url + address)
+    else
+      await page.evaluate((to) => {
+        history.pushState(null, '', to)
+        dispatchEvent(new PopStateEvent('popstate', { state: null }))
+      }, address)
+    await rest()
+    await page.getByRole('heading').first().waitFor()
+    await page.locator('.skeleton').first().waitFor({ state: 'detached' })
+    // some addresses lead on to the first sheet below them, none to the door
+    expect.soft(page.url(), sheet.name).toContain(app.url + address)
+    return address
+  }
 }
 
 async function expectNarrowerThan(width: number, page: Page, sheet: string): Promise<void> {
@@ -85,11 +115,16 @@ async function expectNarrowerThan(width: number, page: Page, sheet: string): Pro
   expect.soft(taken, `${sheet} at ${String(width)} px`).toBeLessThanOrEqual(width)
 }
 
-/** Every word from right to left, in place: a page takes seconds to open and has the same words either way. */
-async function writeRightToLeft(page: Page): Promise<void> {
-  await page.evaluate(() => {
-    const words = document.createTreeWalker(document.body, NodeFilter.SHOW_TEXT)
-    while (words.nextNode()) words.currentNode.nodeValue = `\u202e${words.currentNode.nodeValue ?? ''}\u202c`
+/** How wide the page is with every word from right to left, in place: a page has the same words either way. */
+async function widthFromRightToLeft(page: Page): Promise<number> {
+  return page.evaluate(() => {
+    const walker = document.createTreeWalker(document.body, NodeFilter.SHOW_TEXT)
+    const before = new Map<Node, string | null>()
+    while (walker.nextNode()) before.set(walker.currentNode, walker.currentNode.nodeValue)
+    for (const [node, words] of before) node.nodeValue = `\u202e${words ?? ''}\u202c`
+    const width = document.documentElement.scrollWidth
+    for (const [node, words] of before) node.nodeValue = words
+    return width
   })
 }
 
@@ -99,9 +134,10 @@ describe('every sheet with the practice data, in the hand and at the desk', () =
     async (name) => {
       const { page } = await newSession(browser, { ...hand, expectedErrors })
       await signIn(page, name)
+      const open = opener(page)
       for (const sheet of everySheet.filter((each) => each.as === name)) {
         await page.setViewportSize(hand)
-        const address = await open(page, sheet)
+        const address = await open(sheet)
         expect.soft(address, `${sheet.name} has something to show`).not.toBeNull()
         if (address === null) continue
         await expectNarrowerThan(hand.width, page, sheet.name)
@@ -124,12 +160,14 @@ describe('every sheet in longer words, and from right to left', () => {
       const { page, context } = await newSession(browser, { ...hand, expectedErrors })
       await context.addInitScript(() => localStorage.setItem('pratique.words', 'pseudo'))
       await signIn(page, name)
+      const open = opener(page)
       for (const sheet of everySheet.filter((each) => each.as === name)) {
-        if ((await open(page, sheet)) === null) continue
+        if ((await open(sheet)) === null) continue
         expect.soft(await page.locator('main').innerText(), sheet.name).toMatch(/\[.*[áéíóúñç]/)
         await expectNarrowerThan(hand.width, page, sheet.name)
-        await writeRightToLeft(page)
-        await expectNarrowerThan(hand.width, page, `${sheet.name} from right to left`)
+        expect
+          .soft(await widthFromRightToLeft(page), `${sheet.name} from right to left`)
+          .toBeLessThanOrEqual(hand.width)
       }
     },
     300_000,
