@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import pg from 'pg'
 import request from 'supertest'
+import { createLockout } from '../../server/platform/sign-in/lockout.ts'
 import { password, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -70,17 +71,50 @@ describe('sign-in', () => {
     },
   )
 
+  it('tries no more than 5 of 30 wrong passwords that come at once', async () => {
+    const email = 'at-once@harrow-point.example'
+    const person = await api.person({ email, printedName: 'Tried At Once', roles: ['keeper'] })
+    const statuses = async (send: (typed: string) => PromiseLike<{ status: number }>) => {
+      const replies = await Promise.all(Array.from({ length: 30 }, (_, i) => send(`wrong ${String(i)}`)))
+      return replies.map(({ status }) => status).sort()
+    }
+    const fiveOfThirty = (wrong: number) => [...Array<number>(5).fill(wrong), ...Array<number>(25).fill(429)]
+    const signIn = (typed: string) => api.anonymous().post('/api/sign-in').send({ email, password: typed })
+    expect(await statuses(signIn)).toEqual(fiveOfThirty(401))
+    // the form of somebody who is signed in has a lock of its own
+    const change = (currentPassword: string) =>
+      person.agent.post('/api/me/password').send({ currentPassword, newPassword: 'another one, longer' })
+    expect(await statuses(change)).toEqual(fiveOfThirty(403))
+  })
+
+  it('tries no more than 5 also where several processes of the server are asked at once', async () => {
+    const { dataSource, clock } = api.composition.parts
+    const tried = { emailKey: 'own:several', address: '' }
+    let looked = 0
+    const outcomes = await Promise.allSettled(
+      Array.from({ length: 30 }, () =>
+        createLockout({ dataSource, clock }).attempt(
+          tried,
+          () => Promise.resolve((looked += 1)).then(() => null),
+          String,
+        ),
+      ),
+    )
+    expect(looked).toBe(5)
+    expect(outcomes.filter(({ status }) => status === 'fulfilled')).toHaveLength(5)
+  })
+
   it('locks only where the wrong tries came from, and not a house of many people', async () => {
     const email = 'elsewhere@harrow-point.example'
     await api.person({ email, printedName: 'Guessed At', roles: ['keeper'] })
     const { lockout } = api.composition
-    for (let i = 0; i < 5; i++)
-      await lockout.note({ emailKey: email, address: '203.0.113.9', succeeded: false })
+    const tryWrongly = (address: string) =>
+      lockout.attempt({ emailKey: email, address }, () => Promise.resolve(null), String)
+    for (let i = 0; i < 5; i++) await tryWrongly('203.0.113.9')
     expect(await lockout.minutesLocked({ emailKey: email, address: '203.0.113.9' })).toBe(15)
     await api.anonymous().post('/api/sign-in').send({ email, password }).expect(200)
     // guessing from many addresses at once is still stopped
-    for (let i = 0; i < 50; i++)
-      await lockout.note({ emailKey: email, address: `203.0.113.${String(i)}`, succeeded: false })
+    for (let i = 0; i < 50; i++) await tryWrongly(`198.51.100.${String(i)}`)
     await api.anonymous().post('/api/sign-in').send({ email, password }).expect(429)
     // a shift begins: more people than were once let in from one address
     const keeper = { email: 'keeper@harrow-point.example', password }

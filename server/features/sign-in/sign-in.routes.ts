@@ -77,14 +77,12 @@ export function signInRoutes(parts: SignInParts): Route[] {
   return [
     route(contracts.signIn, async ({ body, req, context }): Promise<Me> => {
       const tried = { emailKey: body.email.toLowerCase(), address: req.ip ?? '' }
-      const minutes = await lockout.minutesLocked(tried)
-      if (minutes > 0)
-        throw new Problem('sign-in-locked', {
-          detail: `Wait ${String(minutes)} min, then try again, or ask an administrator for a one-time password.`,
-          extra: { retry_after_seconds: minutes * 60 },
-        })
-      const person = await authenticate(authenticator, req)
-      await lockout.note({ ...tried, succeeded: person !== null })
+      const person = await lockout.attempt(
+        tried,
+        () => authenticate(authenticator, req),
+        (minutes) =>
+          `Wait ${String(minutes)} min, then try again, or ask an administrator for a one-time password.`,
+      )
       if (!person)
         throw new Problem('sign-in-failed', {
           detail: 'Check both. 5 wrong tries lock the account for 15 minutes.',

@@ -22,16 +22,15 @@ export function createOwnPassword(parts: {
   return {
     async confirm(personId, typed, { pointer, detail }) {
       const tried = { emailKey: `own:${personId}`, address: '' }
-      const minutes = await parts.lockout.minutesLocked(tried)
-      if (minutes > 0)
-        throw new Problem('sign-in-locked', {
-          detail: `Wait ${String(minutes)} min before you type your password again.`,
-          extra: { retry_after_seconds: minutes * 60 },
-        })
-      const hash = await parts.readPasswordHash(personId)
-      if (hash === null) throw new Problem('not-signed-in')
-      const right = await isPassword(hash, typed)
-      await parts.lockout.note({ ...tried, succeeded: right })
+      const right = await parts.lockout.attempt(
+        tried,
+        async () => {
+          const hash = await parts.readPasswordHash(personId)
+          if (hash === null) throw new Problem('not-signed-in')
+          return (await isPassword(hash, typed)) || null
+        },
+        (minutes) => `Wait ${String(minutes)} min before you type your password again.`,
+      )
       if (!right)
         throw new Problem('password-wrong', {
           detail,
