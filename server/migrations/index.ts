@@ -16,6 +16,7 @@ import { Bodies1764600000026 } from './0026-bodies.ts'
 import { PlainText1764600000029 } from './0029-plain-text.ts'
 import { RowMarks1764600000032 } from './0032-row-marks.ts'
 import { DoseOverrides1764600000033 } from './0033-dose-overrides.ts'
+import { EndsThatCount1764600000034 } from './0034-ends-that-count.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -38,4 +39,5 @@ export const migrations = [
   PlainText1764600000029,
   RowMarks1764600000032,
   DoseOverrides1764600000033,
+  EndsThatCount1764600000034,
 ]

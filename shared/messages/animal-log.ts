@@ -56,6 +56,7 @@ export const discrepancyNames = defineMessages({
   'dose-of-other-product': 'another product given than was ordered.',
   'dosed-in-absence': 'a dose recorded while it was not in that water.',
   'dose-under-broken-order': 'a dose recorded under an order that is not what was signed.',
+  'end-before-dose': 'an end of a bath recorded for a time before it began.',
   'died-elsewhere': 'found dead where it was not.',
 } satisfies Record<DiscrepancyKind, string>)
 
@@ -101,6 +102,8 @@ export const discrepancySentences = defineMessages({
     `Dose ${p.said('key')} of ${p.said('order')} was recorded as given in ${p.said('enclosure')}; by the register no animal of the order was in that water then.`,
   'dose-under-broken-order': (p) =>
     `Dose ${p.said('key')} of ${p.said('order')}: ${p.said('given')} was recorded as given, and the signed order cannot be relied on: its text, or what is stored beside it, is not what was signed. Find out what was meant and what the animals were given.`,
+  'end-before-dose': (p) =>
+    `Dose ${p.said('key')} of ${p.said('order')}: an end was recorded for a time before the dose went in. It ends nothing. Find out when the animals were in the bath, and have the real end recorded.`,
   'died-elsewhere': (p) =>
     p.said('place') === ''
       ? `${p.said('seen')} found dead in ${p.said('enclosure')}; by the register it was in no enclosure of the house then. A move was not recorded, or the number is another animal’s.`

@@ -127,9 +127,9 @@ export const sheetWords = defineMessages({
   struck: (p: { by: string; at: string }) => `Struck out by ${p.by}, ${p.at}.`,
   struckReason: (p: { reason: string }) => `“${p.reason}”`,
   stopBeforeStart:
-    'This end lies before the dose went in. One of the two times is wrong: strike it out and enter it anew.',
+    'An end was recorded before the start, so it ends nothing; record the real end. If the time of the dose is wrong, strike that record out and enter it anew.',
   severalEnds: (p: { count: number }) =>
-    `${String(p.count)} ends of this bath are recorded. The latest counts. Strike out what is wrong.`,
+    `${String(p.count)} ends of this bath are recorded. The latest that is not before its start counts. Strike out what is wrong.`,
   otherEnd: 'Another end:',
   strikeOtherStop: (p: { at: string }) => `Strike out the end at ${p.at}`,
   strikeDose: 'Strike out this record',
@@ -213,7 +213,9 @@ export const timerWords = defineMessages({
   outBody: 'Write down how it was taken out.',
   stopAct: 'Stop it now',
   beforeStart: (p: { at: string }) =>
-    `The dose went in at ${p.at}. Look at the time again; the stop is kept as you say all the same.`,
+    `The dose went in at ${p.at}. Look at the time again: an end before the start ends nothing.`,
+  shutBeforeStart: 'The time is before the dose went in. Put it right, or confirm below that it stays.',
+  keepBeforeStart: 'Keep this time all the same; the bath goes on until its real end is recorded',
   endAct: 'Record the end',
   outAct: 'Record it',
   stopBack: 'Let it run',

@@ -287,7 +287,7 @@ describe('a record of a dose that was a mistake', () => {
     expect(await events()).toEqual([])
   })
 
-  it('whose end lies before it is kept, and said so', async () => {
+  it('whose end lies before it runs on: the end is kept, said and explained, and ends nothing', async () => {
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)
     const dose = api.nextId()
@@ -297,7 +297,27 @@ describe('a record of a dose that was a mistake', () => {
       .post(`/api/doses/${dose}/stop`)
       .send({ id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T08:20:00Z' })
       .expect(201)
-    expect(stopped.body.recorded[0].stop).toMatchObject({ beforeStart: true, mayStrike: true })
+    expect(stopped.body).toMatchObject({
+      state: 'running',
+      recorded: [{ stop: null, otherStops: [{ beforeStart: true, mayStrike: true }] }],
+    })
+    expect(await openOf(bath.school.accession)).toMatchObject([
+      { kind: 'end-before-dose', forRole: 'veterinarian' },
+    ])
+    const today = await keeper.agent.get('/api/today').expect(200)
+    expect(JSON.stringify(today.body)).toContain(`bath-running`)
+    // the dose of another order of the same agent into that water still meets this one
+    const { rows } = await asked(bath, number)
+    expect(rows).toContain('R50')
+    // a minute is the finest that is typed: the minute of the dose is not before it
+    const ended = await keeper.agent
+      .post(`/api/doses/${dose}/stop`)
+      .send({ id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T18:20:00Z' })
+      .expect(201)
+    expect(ended.body).toMatchObject({ state: 'done', recorded: [{ stop: { beforeStart: false } }] })
+    const early = ended.body.recorded[0].otherStops[0].id
+    expect((await strike('stop', early, keeper)).body.recorded[0].otherStops).toEqual([])
+    expect(await openOf(bath.school.accession)).toEqual([])
   })
 })
 

@@ -11,6 +11,8 @@ export interface OtherStop {
   rescue: string | null
   recorded_at: string
   recorded_by: string
+  /** It lies before the dose: kept and shown, and it ends nothing. */
+  before_start: boolean
 }
 
 export interface DoseReadRow {
@@ -52,12 +54,14 @@ export const recordOf = (row: DoseReadRow): DoseRecord => ({
   endedAt: row.stop_at?.toISOString() ?? null,
 })
 
-/** Of several ends of one bath the latest counts until somebody strikes it out: the animals were in it that long. */
+/** Of several ends of one bath the latest that is not before it counts until somebody strikes it out: the animals were in it that long. */
 const latestFirst = 'b.happened_at DESC, b.recorded_at DESC'
 const otherStops = `(SELECT coalesce(json_agg(json_build_object('id', b.id, 'at', b.happened_at, 'by', r.printed_name,
-             'cause', b.cause, 'seen', b.seen, 'rescue', b.rescue, 'recorded_at', b.recorded_at, 'recorded_by', b.recorded_by)
+             'cause', b.cause, 'seen', b.seen, 'rescue', b.rescue, 'recorded_at', b.recorded_at, 'recorded_by', b.recorded_by,
+             'before_start', b.before_start)
              ORDER BY ${latestFirst}), '[]')
-        FROM live_bath_stops b JOIN people r ON r.id = b.recorded_by WHERE b.dose_id = d.id AND b.id <> s.id)`
+        FROM recorded_bath_stops b JOIN people r ON r.id = b.recorded_by
+       WHERE b.dose_id = d.id AND b.id IS DISTINCT FROM s.id)`
 
 /** Every record of an order's doses, over all its versions, in time order, struck-out ones with the reason. */
 export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {

@@ -46,6 +46,15 @@ export async function hasEnded(tx: Tx, doseId: string): Promise<boolean> {
   return rows.length > 0
 }
 
+/** Whether an end that lies before its dose still waits for somebody to strike it out. */
+export async function hasEarlyEnd(tx: Tx, doseId: string): Promise<boolean> {
+  const rows: unknown[] = await tx.manager.query(
+    'SELECT 1 FROM recorded_bath_stops s WHERE s.dose_id = $1 AND s.before_start LIMIT 1',
+    [doseId],
+  )
+  return rows.length > 0
+}
+
 /** The newest calculation of a part for one dose; null when there is none. */
 export function newestCalculation(
   tx: Tx,

@@ -1,5 +1,6 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/doses.contract.ts'
+import { isBeforeStart } from '../../../shared/domain/dose/is-before-start.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
@@ -23,7 +24,8 @@ import type { AdministrationsParts } from './dose-context.ts'
 import { createOverrides } from './override.service.ts'
 import { createStrikes } from './strike.service.ts'
 import { tellClocksAnew } from './tell-clocks.ts'
-import { goneOf } from './dose-situation.ts'
+import type { DoseRow } from './dose.entity.ts'
+import { goneOf, readDoseSituation } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { amountEntered } from './entered-amounts.ts'
 import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
@@ -132,6 +134,21 @@ export function createAdministrationsService(parts: AdministrationsParts) {
     if (goneOf(situation).all) await open('dosed-in-absence', treated, { enclosure: content.enclosure.code })
   }
 
+  /** An end before its dose ends nothing: a veterinarian finds out when the animals were in the bath. */
+  async function openEarlyEnd(tx: Tx, dose: DoseRow, order: { number: string }, times: FactTimes): Promise<void> {
+    const { id: doseId, doseKey: key, happenedAt: at } = dose
+    if (await repository.findVoid(tx, { doseId })) return
+    const { treated } = await readDoseSituation(parts, order.number, key, at, { db: tx.manager })
+    const here = treated.filter(({ isHere }) => isHere !== false)
+    await parts.animals.service.openForDose(tx, {
+      kind: 'end-before-dose',
+      animalIds: (here.length > 0 ? here : treated).map(({ animalId }) => animalId),
+      doseId,
+      facts: { dose: doseId, order: order.number, key },
+      times,
+    })
+  }
+
   return {
     ...createCalculations(parts),
     ...createStrikes(parts),
@@ -207,7 +224,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       })
     },
 
-    /** Ends a bath. Never gated: whoever stands at the tank may stop it. */
+    /** Ends a bath. Never gated: whoever stands at the tank may stop it. A time before the dose is kept, and ends nothing. */
     async stopBath(
       context: RequestContext,
       doseId: string,
@@ -219,17 +236,21 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
         if (!dose || !orderId) throw new Problem('not-found')
         const isFirst = !(await repository.hasEnded(tx, doseId))
+        const times = {
+          happenedAt,
+          happenedOn: await parts.facility.dateOf(happenedAt, tx),
+          recordedAt: tx.at,
+          recordedBy: personOf(tx),
+        }
         const { created } = await repository.insertStop(tx, {
           id: given.id,
           doseId,
           cause: given.cause,
           seen: given.seen ?? null,
           rescue: given.rescue ?? null,
-          happenedAt,
-          happenedOn: await parts.facility.dateOf(happenedAt, tx),
-          recordedAt: tx.at,
-          recordedBy: personOf(tx),
+          ...times,
         })
+        const isEarly = isBeforeStart(happenedAt.toISOString(), dose.happenedAt.toISOString())
         if (created)
           tx.audit({
             action: 'bath.stop',
@@ -237,8 +258,9 @@ export function createAdministrationsService(parts: AdministrationsParts) {
             after: { cause: given.cause, seen: given.seen, rescue: given.rescue },
             clinical: true,
           })
-        const named = created && !isFirst && (await readOrderNumberOfDose(tx.manager, doseId))
-        if (named)
+        const named = created && (await readOrderNumberOfDose(tx.manager, doseId))
+        if (named && isEarly) await openEarlyEnd(tx, dose, named, times)
+        else if (named && !isFirst)
           await tellClocksAnew(parts, tx, { id: orderId, number: named.number }, doseWords.anotherEnd)
         else await parts.orders.course.settle(tx, orderId)
       })

@@ -63,17 +63,17 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
         rescue: row.stop_rescue,
         recorded_at: (row.stop_recorded_at ?? row.recorded_at).toISOString(),
         recorded_by: row.stop_recorded_by ?? '',
+        before_start: false,
       }),
     otherStops: row.other_stops.map((stop) => presentStop(row, reader, stop)),
   }
 }
 
 function presentStop(row: DoseReadRow, reader: Reader, stop: OtherStop): NonNullable<RecordedDose['stop']> {
-  const at = new Date(stop.at)
   return {
     id: stop.id,
-    at: at.toISOString(),
-    beforeStart: at < row.happened_at,
+    at: new Date(stop.at).toISOString(),
+    beforeStart: stop.before_start,
     mayStrike:
       row.struck_reason === null &&
       mayStrike({ recordedAt: new Date(stop.recorded_at), recordedBy: stop.recorded_by }, reader),

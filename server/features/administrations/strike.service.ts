@@ -58,7 +58,10 @@ export function createStrikes(parts: AdministrationsParts) {
           after: { reason },
           clinical: true,
         })
-        if (!stop) await parts.animals.service.settleForDose(tx, id, reason)
+        const { settleForDose } = parts.animals.service
+        if (!stop) await settleForDose(tx, id, reason)
+        else if (!(await repository.hasEarlyEnd(tx, dose.id)))
+          await settleForDose(tx, dose.id, reason, 'end-before-dose')
         await tellClocksAnew(parts, tx, { id: orderId, number }, reason)
         return dose.id
       })

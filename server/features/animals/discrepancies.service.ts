@@ -84,10 +84,11 @@ export function createDiscrepancies(parts: MoveParts) {
         await ledgers.openDiscrepancy(tx, animal, { ...given, source })
     },
 
-    /** The dose was struck out: what it had left open is explained by that. */
-    async settleForDose(tx: Tx, doseId: string, reason: string): Promise<void> {
+    /** The dose, or what was recorded of it, was struck out: what that had left open is explained by it. */
+    async settleForDose(tx: Tx, doseId: string, reason: string, only?: DiscrepancyKind): Promise<void> {
       for (const open of await openOfSource(tx, doseId))
-        await resolveRow(tx, open.id, { outcome: 'seen-wrongly', reason })
+        if (only === undefined || open.kind === only)
+          await resolveRow(tx, open.id, { outcome: 'seen-wrongly', reason })
     },
 
     async resolveDiscrepancy(

@@ -13,6 +13,7 @@
  * - `died-elsewhere`      found dead in an enclosure in which it was not by its moves
  * - `dose-under-broken-order` a dose was recorded under an order that is no longer what was signed
  * - `dosed-in-absence`    a dose was recorded for it at a time at which it was not in that water
+ * - `end-before-dose`     an end of a bath was recorded for a time before its dose
  */
 export const discrepancyKinds = {
   'more-than-counted': 'registrar',
@@ -26,6 +27,7 @@ export const discrepancyKinds = {
   'dose-of-other-product': 'veterinarian',
   'dosed-in-absence': 'veterinarian',
   'dose-under-broken-order': 'veterinarian',
+  'end-before-dose': 'veterinarian',
   'died-elsewhere': 'registrar',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
 

@@ -67,7 +67,10 @@ export function RecordDialog({ sheet, now, onBack }: { sheet: BathSheet; now: st
       ? words.chooseKind
       : wasGiven && amount.value.trim() === ''
         ? words.typeAmount
-        : when.missing
+        : (when.missing ??
+          (endedAt !== null && when.instant !== null && isBeforeStart(endedAt, when.instant)
+            ? words.endBeforeStart
+            : null))
 
   return (
     <Dialog

@@ -65,10 +65,14 @@ function OneRecord({ record, sheet, zone }: { record: RecordedDose; sheet: BathS
       {stop === null ? null : <End stop={stop} sheet={sheet} at={at} />}
       {otherStops.length > 0 ? (
         <>
-          <p className="t-strong text-magenta">{words.severalEnds({ count: otherStops.length + 1 })}</p>
+          {stop === null && otherStops.length === 1 ? null : (
+            <p className="t-strong text-magenta">
+              {words.severalEnds({ count: otherStops.length + (stop === null ? 0 : 1) })}
+            </p>
+          )}
           {otherStops.map((other) => (
             <div key={other.id}>
-              <p className="t-label">{words.otherEnd}</p>
+              {stop === null ? null : <p className="t-label">{words.otherEnd}</p>}
               <End stop={other} sheet={sheet} at={at} />
             </div>
           ))}

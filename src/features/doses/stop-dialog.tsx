@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
+import { isBeforeStart } from '../../../shared/domain/dose/is-before-start.ts'
 import { sheetWords, timerWords as words } from '../../../shared/messages/doses-screens.ts'
 import { enterAndSend, refusalOf } from '../../lib/enter-and-send.ts'
 import { useMe } from '../../lib/me.ts'
@@ -12,6 +13,7 @@ import { Button } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
 import { MomentField } from '../../ui/moment-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
+import { Tick } from '../../ui/tick.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 
@@ -24,9 +26,6 @@ const wordsOf = (kind: StopKind) =>
     end: { question: words.endQuestion, body: words.endBody, act: words.endAct, done: words.done },
     out: { question: words.outQuestion, body: words.outBody, act: words.outAct, done: words.doneOut },
   })[kind]
-
-/** The field takes whole minutes: the minute of the start is not before it. */
-const toMinute = (instant: string) => Math.floor(Date.parse(instant) / 60_000) * 60_000
 
 /**
  * Ends a bath, with a signal or without: it is kept on the device first. Its time is the moment of the first press; no
@@ -60,7 +59,8 @@ export function StopDialog({
   const [seen, setSeen] = useState('')
   const [rescue, setRescue] = useState('')
   const its = wordsOf(kind)
-  const isEarly = when.instant !== null && Date.parse(when.instant) < toMinute(startedAt)
+  const [sure, setSure] = useState(false)
+  const isEarly = when.instant !== null && isBeforeStart(when.instant, startedAt)
   const wrongTime =
     when.missing ?? (isEarly ? words.beforeStart({ at: sayMoment(startedAt, when.zone, now) }) : undefined)
 
@@ -99,7 +99,7 @@ export function StopDialog({
             kind={kind === 'stop' ? 'stop' : 'primary'}
             size="touch"
             disabled={busy}
-            shut={when.missing ?? false}
+            shut={when.missing ?? (isEarly && !sure ? words.shutBeforeStart : false)}
             onClick={() => void send()}
           >
             {its.act}
@@ -132,6 +132,13 @@ export function StopDialog({
           onChange={(event) => setRescue(event.target.value)}
         />
         <MomentField label={words.when} value={when.moment} onChange={when.setMoment} wrong={wrongTime} />
+        {isEarly ? (
+          <Tick
+            label={words.keepBeforeStart}
+            checked={sure}
+            onChange={(event) => setSure(event.target.checked)}
+          />
+        ) : null}
       </div>
     </Dialog>
   )
