@@ -39,7 +39,9 @@ const PlannedDose = z.object({
 const BathStop = z.object({
   id: RecordId,
   at: Instant,
-  beforeStart: z.boolean().describe('Its time lies before that of the dose: one of the two is wrong, and it ends nothing'),
+  beforeStart: z
+    .boolean()
+    .describe('Its time lies before that of the dose: one of the two is wrong, and it ends nothing'),
   mayStrike: z.boolean().describe('The person who asks may strike it out now'),
   by: z.string().describe('Who stopped it'),
   cause: z.enum(['time-up', 'stopped']).describe('At its time, or before it'),
@@ -70,7 +72,9 @@ export const RecordedDose = z.object({
     .describe('Struck out: it stays readable, and nothing rests on it; null while it stands'),
   mayStrike: z.boolean().describe('The person who asks may strike it out now'),
   twice: z.boolean().describe('Another record of the same planned dose exists'),
-  stop: BathStop.nullable().describe('The end of the bath, where it has ended; of several the latest. None lies before the dose'),
+  stop: BathStop.nullable().describe(
+    'The end of the bath, where it has ended; of several the latest. None lies before the dose',
+  ),
   otherStops: z
     .array(BathStop)
     .describe('Other ends that were recorded of it; all but one are wrong, and are struck out'),

@@ -287,6 +287,7 @@ export const recordWords = defineMessages({
   lotUnknown: 'not known',
   when: 'When',
   ended: 'When the bath ended',
+  endBeforeStart: 'The end is before the dose. Put one of the two times right.',
   endedHint: 'Leave empty while it still runs.',
   note: 'In words',
   act: 'Record it',

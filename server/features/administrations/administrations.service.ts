@@ -135,7 +135,12 @@ export function createAdministrationsService(parts: AdministrationsParts) {
   }
 
   /** An end before its dose ends nothing: a veterinarian finds out when the animals were in the bath. */
-  async function openEarlyEnd(tx: Tx, dose: DoseRow, order: { number: string }, times: FactTimes): Promise<void> {
+  async function openEarlyEnd(
+    tx: Tx,
+    dose: DoseRow,
+    order: { number: string },
+    times: FactTimes,
+  ): Promise<void> {
     const { id: doseId, doseKey: key, happenedAt: at } = dose
     if (await repository.findVoid(tx, { doseId })) return
     const { treated } = await readDoseSituation(parts, order.number, key, at, { db: tx.manager })
