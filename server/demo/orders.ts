@@ -62,7 +62,7 @@ const salt: Partial<BathOrderFields> = {
   target: { value: '5', unit: 'g/L' },
   basis: 'active',
   timing: 'timed',
-  contactMinutes: 240,
+  contactMinutes: 60,
   division: { value: '10', unit: 'g' },
   stopIf: 'loss of balance',
   stated: freshWater,

@@ -188,6 +188,7 @@ export const ruleParameterWords = defineMessages({
   apartDays: 'Least time between treatments',
   stopFactor: 'Times the upper end of the range that stop',
   contactStopFactor: 'Times the longest contact of the dose line that stop',
+  untimedBathMinutes: 'Longest contact where a dose line for a bath names no time',
   lowFactor: 'Part of the lower end of the range below which a warning is given',
   veryEarlyFactor: 'Part of the interval before which a dose is stopped',
   oxygenMinutes: 'Oldest oxygen reading',

@@ -96,6 +96,7 @@ export const ruleParameterKeys = [
   'apartDays',
   'stopFactor',
   'contactStopFactor',
+  'untimedBathMinutes',
   'lowFactor',
   'veryEarlyFactor',
   'oxygenMinutes',

@@ -42,7 +42,7 @@ export interface DoseLine {
   high: number
   unit: UnitOf<'massConcentration'> | UnitOf<'volumeConcentration'>
   basis: ConcentrationBasis
-  /** Longest contact in minutes that the source names; null: indefinite or to effect. */
+  /** Longest contact in minutes that the source names; null: indefinite, or a bath to effect that is held to a default. */
   longestContactMinutes: number | null
   water: WaterKind
   source: SourceKey

@@ -81,11 +81,19 @@ describe('R29, R48: what is in the water already, and when', () => {
   })
 })
 
-/** A contact in minutes; null: left in the water. */
-const contact = (minutes: number | null): Partial<CautionFacts['order']> =>
-  minutes === null
-    ? { timing: known('indefinite'), contactMinutes: notApplicable() }
-    : { timing: known('timed'), contactMinutes: known(minutes) }
+/** A contact in minutes, and what the contacts of a day make together; null: left in the water. */
+const contact = (minutes: number | null, minutesPerDay = minutes): Partial<CautionFacts['order']> =>
+  minutes === null || minutesPerDay === null
+    ? {
+        timing: known('indefinite'),
+        contactMinutes: notApplicable(),
+        contactMinutesPerDay: notApplicable(),
+      }
+    : {
+        timing: known('timed'),
+        contactMinutes: known(minutes),
+        contactMinutesPerDay: known(minutesPerDay),
+      }
 
 describe('R49: water and contact of the dose line that is named', () => {
   const named = (line: Partial<DefaultRange>, minutes: number | null, change: Change = {}) =>
@@ -112,8 +120,50 @@ describe('R49: water and contact of the dose line that is named', () => {
   it('stops a line for a bath whose agent is to stay, though it names no minutes', () => {
     const bath = { stays: false, longestContactMinutes: null }
     expect(named(bath, null)).toEqual(['stop left-in-bath-line'])
-    expect(named(bath, 20_160)).toEqual([])
+    expect(named(bath, 20)).toEqual([])
     expect(named({ ...bath, longestContactMinutes: 30 }, null)).toEqual(['stop left-in-over-line'])
+  })
+  it.each<[string, number, number, string[]]>([
+    ['for as long as such a bath is taken for', 60, 60, []],
+    ['longer', 61, 61, ['warning contact-over-untimed-line']],
+    ['exactly twice as long', 120, 120, ['warning contact-over-untimed-line']],
+    ['longer than twice', 121, 121, ['stop contact-far-over-untimed-line']],
+    ['for all but the whole day', 1380, 1380, ['stop contact-far-over-untimed-line']],
+    ['for fourteen days', 20_160, 20_160, ['stop contact-far-over-untimed-line']],
+    ['twice a day', 45, 90, ['warning contact-over-untimed-line']],
+    ['an hour of every two', 60, 720, ['stop contact-far-over-untimed-line']],
+  ])('a line for a bath that names no minutes, %s', (_, minutes, minutesPerDay, expected) => {
+    const facts = someFacts('tricaine', mg(330), {
+      order: {
+        defaultRange: known(aLine(330, { stays: false })),
+        ...contact(minutes, minutesPerDay),
+      },
+    })
+    expect(firedBy('R49', facts)).toEqual(expected)
+  })
+  it('takes the one contact where nobody worked out the sum of a day', () => {
+    const facts = someFacts('tricaine', mg(330), {
+      order: {
+        defaultRange: known(aLine(330, { stays: false })),
+        ...contact(600),
+        contactMinutesPerDay: unknown(),
+      },
+    })
+    expect(firedBy('R49', facts)).toEqual(['stop contact-far-over-untimed-line'])
+  })
+  it('says that such a line names no time, and what its limit is', () => {
+    const facts = someFacts('tricaine', mg(330), {
+      order: { defaultRange: known(aLine(330, { stays: false })), ...contact(20) },
+    })
+    expect(firedBy('R49', facts)).toEqual([])
+    const long = someFacts('tricaine', mg(330), {
+      order: { defaultRange: known(aLine(330, { stays: false })), ...contact(60, 205.714) },
+    })
+    const { cautions } = evaluateCautions({ facts: long, stage: 'design' })
+    const found = cautions.find(({ ruleId }) => ruleId === 'R49')
+    expect(found && plain(sayCaution(found, 'Europe/Lisbon').text)).toBe(
+      'The dose line is for a bath that has an end, and names no time. 3 hours 26 minutes, the longest bath or all baths of a day together, is far longer than the 60 minutes that such a bath may take.',
+    )
   })
   it('stops a line of other water, and asks where nobody knows what water it is', () => {
     const inWater = (water: DefaultRange['water'], kind: CautionFacts['water']['kind']) =>
@@ -141,14 +191,16 @@ describe('R26, R47: no line is named, and only lines for such water and such a c
     aLine(100, { water: 'fresh', longestContactMinutes: 60 }),
     aLine(75, { water: 'marine', longestContactMinutes: 30 }),
   ]
+  const sedation = [aLine(330, { stays: false })]
   const of = (
     target: number,
     lines: readonly DefaultRange[],
     minutes: number | null,
     kind: CautionFacts['water']['kind'] = known('marine'),
+    minutesPerDay = minutes,
   ) =>
     someFacts('praziquantel', mg(target), {
-      order: { defaultRange: unknown(), agentRanges: known(lines), ...contact(minutes) },
+      order: { defaultRange: unknown(), agentRanges: known(lines), ...contact(minutes, minutesPerDay) },
       water: { kind },
     })
   it.each<[string, CautionFacts, string[]]>([
@@ -162,6 +214,15 @@ describe('R26, R47: no line is named, and only lines for such water and such a c
       of(2, [aLine(10, { stays: false })], null),
       ['stop no-line-fits'],
     ],
+    [
+      '330 mg/L for two hours, and the only line is for a bath',
+      of(330, sedation, 120),
+      ['warning line-not-named'],
+    ],
+    ['the same for longer', of(330, sedation, 121), ['stop no-line-fits']],
+    ['the same for ten hours', of(330, sedation, 600), ['stop no-line-fits']],
+    ['the same for fourteen days', of(330, sedation, 20_160), ['stop no-line-fits']],
+    ['the same an hour of every two', of(330, sedation, 60, known('marine'), 720), ['stop no-line-fits']],
     ['75 mg/L for half an hour', of(75, peroxide, 30), ['warning line-not-named']],
     ['75 mg/L for five hours', of(75, peroxide, 300), ['stop no-line-fits']],
     ['100 mg/L is a figure for fresh water', of(100, peroxide, 30), ['warning over-default']],

@@ -1,7 +1,7 @@
 import { doseOf } from '../caution-param.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds, isBelow } from '../exceeds.ts'
-import { linesOfAgent, linesToCompare, nearestLine } from '../dose-lines.ts'
+import { contactParameters, linesOfAgent, linesToCompare, nearestLine } from '../dose-lines.ts'
 import { valueOf } from '../fact.ts'
 
 /**
@@ -17,6 +17,7 @@ export const defaultRange = defineRule({
   parameters: {
     stopFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
     lowFactor: { default: 0.5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'higher' },
+    ...contactParameters,
   },
   uses: [
     'order.target',
@@ -24,17 +25,18 @@ export const defaultRange = defineRule({
     'order.agentRanges',
     'order.timing',
     'order.contactMinutes',
+    'order.contactMinutesPerDay',
     'water.kind',
     'lot.densityGPerMl',
   ],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
-  judge(facts, { stopFactor, lowFactor }) {
+  judge(facts, { stopFactor, lowFactor, ...contactLimits }) {
     const target = valueOf(facts.order.target)
     // No figure yet, or one without a basis, is R27's matter.
     if (!target || target.basis === null) return []
     const named = valueOf(facts.order.defaultRange)
-    const lines = linesToCompare(facts)
+    const lines = linesToCompare(facts, contactLimits)
     if (lines.length === 0 && !named && linesOfAgent(facts).length > 0)
       return [
         {
@@ -54,7 +56,7 @@ export const defaultRange = defineRule({
           unknown: ['order.agentRanges'],
         },
       ]
-    const nearest = nearestLine(facts)
+    const nearest = nearestLine(facts, contactLimits)
     if (!nearest)
       return [
         {

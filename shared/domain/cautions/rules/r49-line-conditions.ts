@@ -1,32 +1,31 @@
 import type { CautionFacts, DefaultRange } from '../caution-facts.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
+import { type ContactLimits, contactParameters, isUntimedBath, longestContactOrDay } from '../dose-lines.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
 
 /**
  * A dose line is a figure for one kind of water and, where its source says so, for a time. The same figure in other
- * water, or for much longer, is another treatment.
+ * water, or for much longer, is another treatment. A line for a bath that names no time is held to a default.
  */
 export const lineConditions = defineRule({
   id: 'R49',
   levels: ['warning', 'stop'],
   when: 'design',
   overridable: true,
-  parameters: {
-    contactStopFactor: {
-      default: 2,
-      unit: 'factor',
-      source: 'project-default',
-      mark: 'P',
-      tighter: 'lower',
-    },
-  },
-  uses: ['order.defaultRange', 'order.timing', 'order.contactMinutes', 'water.kind'],
+  parameters: contactParameters,
+  uses: [
+    'order.defaultRange',
+    'order.timing',
+    'order.contactMinutes',
+    'order.contactMinutesPerDay',
+    'water.kind',
+  ],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
-  judge(facts, { contactStopFactor }) {
+  judge(facts, limits) {
     const line = valueOf(facts.order.defaultRange)
-    return line ? [...judgeWater(line, facts), ...judgeContact(line, facts, contactStopFactor)] : []
+    return line ? [...judgeWater(line, facts), ...judgeContact(line, facts, limits)] : []
   },
 })
 
@@ -55,25 +54,43 @@ function judgeWater({ water: lineWater }: DefaultRange, { water: { kind } }: Cau
   ]
 }
 
-function judgeContact(
-  { longestContactMinutes: limitMinutes, stays }: DefaultRange,
-  { order }: CautionFacts,
-  stopFactor: number,
-): CautionFinding[] {
+function judgeContact(line: DefaultRange, facts: CautionFacts, limits: ContactLimits): CautionFinding[] {
+  const { longestContactMinutes: limitMinutes } = line
   const resolvedBy = ['shorten-contact', 'choose-dose-line'] as const
-  const isLeftIn = valueOf(order.timing) === 'indefinite'
-  if (limitMinutes === null)
-    return isLeftIn && !stays ? [{ code: 'left-in-bath-line', level: 'stop', params: {}, resolvedBy }] : []
+  const isLeftIn = valueOf(facts.order.timing) === 'indefinite'
+  if (isUntimedBath(line))
+    return isLeftIn
+      ? [{ code: 'left-in-bath-line', level: 'stop', params: {}, resolvedBy }]
+      : judgeUntimedBath(facts, limits)
+  if (limitMinutes === null) return []
   if (isLeftIn) return [{ code: 'left-in-over-line', level: 'stop', params: { limitMinutes }, resolvedBy }]
-  const minutes = valueOf(order.contactMinutes)
+  const minutes = valueOf(facts.order.contactMinutes)
   if (minutes === null || !exceeds(minutes, limitMinutes)) return []
-  const isFar = exceeds(minutes, limitMinutes * stopFactor)
+  const isFar = exceeds(minutes, limitMinutes * limits.contactStopFactor)
   return [
     {
       code: isFar ? 'contact-far-over-line' : 'contact-over-line',
       level: isFar ? 'stop' : 'warning',
       params: { minutes, limitMinutes },
       resolvedBy,
+    },
+  ]
+}
+
+function judgeUntimedBath(
+  facts: CautionFacts,
+  { untimedBathMinutes, contactStopFactor }: ContactLimits,
+): CautionFinding[] {
+  const minutes = longestContactOrDay(facts)
+  if (minutes === null || !exceeds(minutes, untimedBathMinutes)) return []
+  const isFar = exceeds(minutes, untimedBathMinutes * contactStopFactor)
+  return [
+    {
+      code: isFar ? 'contact-far-over-untimed-line' : 'contact-over-untimed-line',
+      level: isFar ? 'stop' : 'warning',
+      // a day is seldom a whole number of intervals
+      params: { minutes: Math.ceil(minutes), limitMinutes: untimedBathMinutes },
+      resolvedBy: ['shorten-contact', 'choose-dose-line', 'confirm-dose-line'],
     },
   ]
 }

@@ -5,6 +5,9 @@ import { nearestLine } from '../dose-lines.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
 
+/** What stays in the water is held against no line for a bath, however short. */
+const noBath = { untimedBathMinutes: 0, contactStopFactor: 1 }
+
 /**
  * Doses that stay in the water add up unless it is changed between them. An order is told what its last dose makes; a
  * dose is held while what went in before it was not recorded as out and the two would be far too strong.
@@ -35,7 +38,7 @@ export const dosesAddUp = defineRule({
   concerns: ({ order }) => valueOf(order.timing) === 'indefinite',
   judge(facts, { stopFactor }, stage) {
     const spacing = valueOf(facts.order.spacing)
-    const nearest = nearestLine(facts)
+    const nearest = nearestLine(facts, noBath)
     if (spacing?.readingDriven || !nearest) return []
     const stillIn = stillInOf(facts)
     const toCome =
