@@ -1,5 +1,6 @@
 import type { BathOrderFields } from '../../shared/contracts/order-primitives.ts'
 import type { DoseUse } from '../../shared/domain/formulary/dose-line.ts'
+import { nothingStated } from '../../shared/domain/orders/bath-order-draft.ts'
 import type { Composition } from '../composition.ts'
 import { saidCautions } from '../features/orders/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
@@ -27,16 +28,8 @@ interface DemoOrder {
   fields: Partial<BathOrderFields>
 }
 
-const noneStated: BathOrderFields['stated'] = {
-  waterKind: null,
-  oxygenIsLogged: null,
-  hasBloom: null,
-  hasPlantsOrAlgae: null,
-  lights: null,
-  experienceWith: [],
-}
 /** The river water of the quarantine wing, whose salinity nobody reads. */
-const freshWater = { ...noneStated, waterKind: 'fresh' as const }
+const freshWater = { ...nothingStated, waterKind: 'fresh' as const }
 
 const peroxide: Partial<BathOrderFields> = {
   problem: 'Yellow mats on the gills, columnaris suspected',
@@ -196,7 +189,7 @@ export async function seedOrders(
       stopIf: '',
       instructions: 'Dissolve in water of the tank and add over 20 min at the return.',
       allowedVolumeDriftPercent: 5,
-      stated: noneStated,
+      stated: nothingStated,
       ...order.fields,
     }
     const writer = as(order.fate === 'proposal' ? 'tech' : 'vet')

@@ -1,5 +1,6 @@
 import type { AnsweredCaution } from '../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields, SaidCaution } from '../../shared/contracts/order-primitives.ts'
+import { nothingStated } from '../../shared/domain/orders/bath-order-draft.ts'
 import { newKey, password } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 import { aGroup, aTaxon } from './a-collection.ts'
@@ -120,14 +121,7 @@ export const bathFields = (
   stopIf: 'any fish lies on its side',
   instructions: 'Dissolve in tank water and add over 20 min at the return.',
   allowedVolumeDriftPercent: 5,
-  stated: {
-    waterKind: 'marine',
-    oxygenIsLogged: null,
-    hasBloom: null,
-    hasPlantsOrAlgae: null,
-    lights: null,
-    experienceWith: [],
-  },
+  stated: { ...nothingStated, waterKind: 'marine' },
   ...given,
 })
 

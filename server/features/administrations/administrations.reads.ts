@@ -55,7 +55,7 @@ export const recordOf = (row: DoseReadRow): DoseRecord => ({
 })
 
 /** Of several ends of one bath the latest that is not before it counts until somebody strikes it out: the animals were in it that long. */
-const latestFirst = 'b.happened_at DESC, b.recorded_at DESC'
+export const latestFirst = 'b.happened_at DESC, b.recorded_at DESC'
 const otherStops = `(SELECT coalesce(json_agg(json_build_object('id', b.id, 'at', b.happened_at, 'by', r.printed_name,
              'cause', b.cause, 'seen', b.seen, 'rescue', b.rescue, 'recorded_at', b.recorded_at, 'recorded_by', b.recorded_by,
              'before_start', b.before_start)

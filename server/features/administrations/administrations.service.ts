@@ -1,6 +1,7 @@
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import type * as contracts from '../../../shared/contracts/doses.contract.ts'
 import { isBeforeStart } from '../../../shared/domain/dose/is-before-start.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
@@ -47,9 +48,15 @@ interface DoseToWrite {
   marks: Exception[]
 }
 
+/** Whose record what happened to the dose belongs in: the animals that were in its water, or all that it was for where none was. */
+function affectedOf(treated: DoseSituation['treated']): DoseSituation['treated'] {
+  const here = treated.filter(({ isHere }) => isHere !== false)
+  return here.length > 0 ? here : treated
+}
+
 export function createAdministrationsService(parts: AdministrationsParts) {
   async function writeDose(tx: Tx, situation: DoseSituation, given: DoseToWrite): Promise<void> {
-    const happened = given.kind === 'given' || given.kind === 'recorded'
+    const happened = wentIn(given)
     const isFact = given.kind === 'recorded'
     const lot = given.lotId === null ? null : await readLotNamed(tx, situation, given.lotId)
     const exceptions = [...given.marks, ...(isFact ? exceptionsOf(situation, { ...given, lot }) : [])]
@@ -106,7 +113,6 @@ export function createAdministrationsService(parts: AdministrationsParts) {
   ): Promise<void> {
     const { treated, content, planned } = situation
     const facts = { dose: given.id, order: content.number, key: planned.key }
-    const here = treated.filter(({ isHere }) => isHere !== false)
     const open = (
       kind: 'dose-amount-differs' | 'dosed-in-absence' | 'dose-of-other-product' | 'dose-under-broken-order',
       animals: readonly { animalId: string }[],
@@ -119,7 +125,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         facts: { ...facts, ...more },
         times,
       })
-    const affected = here.length > 0 ? here : treated
+    const affected = affectedOf(treated)
     if (given.lot && !given.lot.isOrdered) {
       const { lotNumber, productName } = given.lot
       await open('dose-of-other-product', affected, { lot: lotNumber, product: productName })
@@ -144,10 +150,9 @@ export function createAdministrationsService(parts: AdministrationsParts) {
     const { id: doseId, doseKey: key, happenedAt: at } = dose
     if (await repository.findVoid(tx, { doseId })) return
     const { treated } = await readDoseSituation(parts, order.number, key, at, { db: tx.manager })
-    const here = treated.filter(({ isHere }) => isHere !== false)
     await parts.animals.service.openForDose(tx, {
       kind: 'end-before-dose',
-      animalIds: (here.length > 0 ? here : treated).map(({ animalId }) => animalId),
+      animalIds: affectedOf(treated).map(({ animalId }) => animalId),
       doseId,
       facts: { dose: doseId, order: order.number, key },
       times,

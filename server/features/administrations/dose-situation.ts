@@ -8,6 +8,7 @@ import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import type { MarksOnFile } from '../../../shared/domain/dose/judge-mark.ts'
 import type { Drift } from '../../../shared/domain/dose/check-drift.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -16,7 +17,7 @@ import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Animals } from '../animals/index.ts'
 import { placeReads } from '../enclosures/index.ts'
-import { countText } from '../orders/index.ts'
+import { saidAnimal } from '../orders/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { readDoses, stands } from './administrations.reads.ts'
@@ -83,7 +84,7 @@ function withSpacing(
   content: SignedOrder,
   records: readonly DoseReadRow[],
 ): CautionFacts {
-  const given = records.filter((record) => record.kind === 'given' || record.kind === 'recorded')
+  const given = records.filter(wentIn)
   const { intervalHours, doses } = content.fields
   const last = given.at(-1)?.happened_at.toISOString() ?? null
   const dosesGiven = known(
@@ -126,16 +127,7 @@ async function standIn(
   db: Db = dataSource,
 ): Promise<SignedOrder> {
   const named = await animals.questions.animalsById(order.fields.animalIds, at, db)
-  const said = named.map((animal) => ({
-    animalId: animal.animalId,
-    accession: animal.accession,
-    commonName: animal.commonName,
-    scientificName: animal.scientificName,
-    countText: countText(animal),
-    enclosureCode: animal.enclosureCode ?? '',
-    treated: true,
-  }))
-  return { ...order, water: { ...order.water, animals: said } }
+  return { ...order, water: { ...order.water, animals: named.map((animal) => saidAnimal(animal, true)) } }
 }
 
 /** The animals that the signature names, and whether they are among those in the water. */

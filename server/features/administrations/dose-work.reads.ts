@@ -1,4 +1,5 @@
 import type { Db } from '../../platform/database/db.ts'
+import { latestFirst } from './administrations.reads.ts'
 
 export interface RecentDoseRow {
   id: string
@@ -32,7 +33,7 @@ export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
        JOIN orders o ON o.id = v.order_id
        JOIN enclosures c ON c.id = o.enclosure_id
        JOIN people p ON p.id = d.recorded_by
-       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY b.happened_at DESC, b.recorded_at DESC LIMIT 1) s ON true
+       LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
       WHERE d.happened_at >= $1 OR d.recorded_at >= $1
          OR (v.contact_minutes IS NOT NULL AND d.kind IN ('given', 'recorded') AND s.id IS NULL)

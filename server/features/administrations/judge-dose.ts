@@ -3,6 +3,7 @@ import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cauti
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { overrideStands } from '../../../shared/domain/orders/dose-override.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
@@ -91,10 +92,7 @@ export function answeredStop(
 /** An earlier bath of the order that nobody has ended: the animals would be in two doses at once. */
 function runningBath({ content, records, planned }: DoseSituation) {
   if (content.fields.contactMinutes === null) return undefined
-  return records.find(
-    ({ kind, dose_key, stop_at }) =>
-      (kind === 'given' || kind === 'recorded') && dose_key !== planned.key && stop_at === null,
-  )
+  return records.filter(wentIn).find(({ dose_key, stop_at }) => dose_key !== planned.key && stop_at === null)
 }
 
 /** Whether the amount has left what the signature covers by more than the water can explain. */

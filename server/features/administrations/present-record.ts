@@ -1,4 +1,5 @@
 import type { RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
@@ -24,7 +25,6 @@ interface Reader {
 }
 
 export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
-  const happened = (one: DoseReadRow) => one.kind === 'given' || one.kind === 'recorded'
   return {
     id: row.id,
     key: row.dose_key,
@@ -49,8 +49,8 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
       mayStrike({ recordedAt: row.recorded_at, recordedBy: row.recorded_by }, reader),
     twice:
       row.struck_reason === null &&
-      happened(row) &&
-      all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && happened(one)),
+      wentIn(row) &&
+      all.some((one) => one.id !== row.id && one.dose_key === row.dose_key && wentIn(one)),
     stop:
       row.stop_at &&
       row.stop_cause &&

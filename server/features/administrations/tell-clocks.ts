@@ -1,9 +1,8 @@
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { readDoses, stands } from './administrations.reads.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import type { DoseSituationParts } from './dose-situation.ts'
-
-const wentIn = ({ kind }: { kind: string }) => kind === 'given' || kind === 'recorded'
 
 /**
  * Clocks of quarantine rest on doses and their ends. After one of them was struck out, or another end was recorded, what

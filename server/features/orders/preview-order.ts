@@ -13,11 +13,22 @@ import type { OrderSituation } from './order-situation.ts'
 import { saidAmount, saidCautions, saidCondition, saidLine } from './say-order.ts'
 
 /** How many animals, in words. */
-export function countText({ count }: AnimalFacts): string {
+function countText({ count }: AnimalFacts): string {
   return count.basis === 'counted'
     ? orderWords.animalsCounted({ count: count.ledger })
     : orderWords.animalsEstimated({ low: count.low, high: count.high })
 }
+
+/** An animal or group in the water, in words. */
+export const saidAnimal = (animal: AnimalFacts, treated: boolean) => ({
+  animalId: animal.animalId,
+  accession: animal.accession,
+  commonName: animal.commonName,
+  scientificName: animal.scientificName,
+  countText: countText(animal),
+  enclosureCode: animal.enclosureCode ?? '',
+  treated,
+})
 
 /** The connected water and everybody in it, in words. */
 export function saidWater(water: WaterFacts, animals: readonly AnimalFacts[], treated: readonly string[]) {
@@ -39,15 +50,7 @@ export function saidWater(water: WaterFacts, animals: readonly AnimalFacts[], tr
           by: '',
         })
       : orderWords.noVolume,
-    animals: animals.map((animal) => ({
-      animalId: animal.animalId,
-      accession: animal.accession,
-      commonName: animal.commonName,
-      scientificName: animal.scientificName,
-      countText: countText(animal),
-      enclosureCode: animal.enclosureCode ?? '',
-      treated: treated.includes(animal.animalId),
-    })),
+    animals: animals.map((animal) => saidAnimal(animal, treated.includes(animal.animalId))),
   }
 }
 

@@ -1,19 +1,10 @@
-import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
+import { nothingStated } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import { orderWords } from '../../../shared/messages/orders.ts'
 import { engineVersion } from './order-content.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { Copies, OrderReadRow } from './orders.reads.ts'
-
-const nothingStated: BathOrderFields['stated'] = {
-  waterKind: null,
-  oxygenIsLogged: null,
-  hasBloom: null,
-  hasPlantsOrAlgae: null,
-  lights: null,
-  experienceWith: [],
-}
 
 /**
  * As much of an order whose signed text cannot be read as the columns beside it tell: where, whom, which drug and when.

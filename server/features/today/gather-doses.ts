@@ -1,4 +1,5 @@
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { addDays } from '../../../shared/domain/time/facility-date.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
@@ -98,7 +99,7 @@ function plannedItems(due: Due, moment: Moment): TodayWork[] {
 
 function recordedItems(row: RecentDoseRow, moment: Moment, mayStop: boolean): TodayWork[] {
   const startedAt = row.happened_at.toISOString()
-  const wasGiven = row.kind === 'given' || row.kind === 'recorded'
+  const wasGiven = wentIn(row)
   const items: TodayWork[] = []
   if (row.contact_minutes !== null && wasGiven && row.stop_at === null) {
     const endsAt = addHours(startedAt, row.contact_minutes / minutesPerHour)

@@ -35,6 +35,16 @@ export interface StatedFacts {
   experienceWith: readonly string[]
 }
 
+/** Before anybody said anything. */
+export const nothingStated = {
+  waterKind: null,
+  oxygenIsLogged: null,
+  hasBloom: null,
+  hasPlantsOrAlgae: null,
+  lights: null,
+  experienceWith: [] as string[],
+} satisfies StatedFacts
+
 /** The product chosen, with the lot if one is chosen, the dose line it is ordered by, and all those it could be. */
 export interface ChosenProduct {
   agent: AgentCode

@@ -23,6 +23,10 @@ export interface DoseRecord {
   endedAt: Instant | null
 }
 
+/** Whether a record is of a dose that went in, under the conditions or as a fact. */
+export const wentIn = ({ kind }: { kind: DoseRecord['kind'] }): boolean =>
+  kind === 'given' || kind === 'recorded'
+
 export interface DoseCourse {
   /** A timed bath runs from its dose to its end; an agent left in the water does not. */
   timed: boolean
@@ -49,9 +53,9 @@ export function listDoseStates(
 ): DoseState[] {
   return planned.map((dose) => {
     const own = records.filter((record) => record.doseKey === dose.key)
-    const wentIn = own.filter(({ kind }) => kind === 'given' || kind === 'recorded')
-    if (wentIn.length > 0)
-      return course.timed && wentIn.some(({ endedAt }) => endedAt === null) ? 'running' : 'given'
+    const given = own.filter(wentIn)
+    if (given.length > 0)
+      return course.timed && given.some(({ endedAt }) => endedAt === null) ? 'running' : 'given'
     const other = own[0]
     if (other) return other.kind === 'refused' ? 'refused' : 'withheld'
     if (course.ended) return 'not-given'

@@ -1,4 +1,5 @@
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 
 /** Which part of the sheet somebody came for, from the address. */
 export type SheetPart = 'second' | 'whole' | null
@@ -41,10 +42,8 @@ export function openRecord(sheet: BathSheet): RecordedDose | null {
   return (
     [...sheet.recorded]
       .reverse()
-      .find(
-        ({ kind, stop, struck }) =>
-          (kind === 'given' || kind === 'recorded') && stop === null && struck === null,
-      ) ?? null
+      .filter(wentIn)
+      .find(({ stop, struck }) => stop === null && struck === null) ?? null
   )
 }
 

@@ -1,4 +1,5 @@
 import { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import { nothingStated } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { instantOfMoment, localMomentOf } from '../../lib/local-moment.ts'
 import type { LocalMoment } from '../../lib/local-moment.ts'
@@ -56,14 +57,7 @@ export const emptyOrder = (): OrderValues => ({
   stopIf: '',
   instructions: '',
   drift: usualDriftPercent,
-  stated: {
-    waterKind: null,
-    oxygenIsLogged: null,
-    hasBloom: null,
-    hasPlantsOrAlgae: null,
-    lights: null,
-    experienceWith: [],
-  },
+  stated: nothingStated,
 })
 
 const numberText = (value: number | null) => (value === null ? '' : String(value))

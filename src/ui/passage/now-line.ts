@@ -1,3 +1,4 @@
+import { stretchesBetween } from './stretches-between.ts'
 import { textBox } from './passage-geometry.ts'
 import type { CourseText } from './passage-geometry.ts'
 
@@ -18,14 +19,7 @@ export function nowLinePieces(
   const gaps = words
     .map((one) => ({ one, box: textBox(one, one.sizePx * letterPart) }))
     .filter(({ box }) => box.x1 - marginPx < x && x < box.x2 + marginPx)
-    .map(({ one }) => ({ y1: one.y - one.sizePx, y2: one.y + one.sizePx / 3 }))
-    .sort((a, b) => a.y1 - b.y1)
-  const pieces: { y1: number; y2: number }[] = []
-  let at = from
-  for (const gap of gaps) {
-    if (gap.y1 > at) pieces.push({ y1: at, y2: gap.y1 })
-    at = Math.max(at, gap.y2)
-  }
-  if (until > at) pieces.push({ y1: at, y2: until })
-  return pieces
+    .map(({ one }) => [one.y - one.sizePx, one.y + one.sizePx / 3] as const)
+    .sort(([a], [b]) => a - b)
+  return stretchesBetween(from, until, gaps).map(([y1, y2]) => ({ y1, y2 }))
 }

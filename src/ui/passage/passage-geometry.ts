@@ -2,6 +2,7 @@ import type { StepState } from '../step-mark.tsx'
 import type { DayScale } from './day-scale.ts'
 import { daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import type { PassageFix, PassageLeg, PassageView } from './passage-view.ts'
+import { stretchesBetween } from './stretches-between.ts'
 
 export type PassageSize = 'roomy' | 'close' | 'case'
 
@@ -122,14 +123,8 @@ function layMarks(leg: PassageLeg, scale: DayScale, y: number, old: boolean): Co
 }
 
 function withoutPauses(from: number, to: number, pauses: readonly { x1: number; x2: number }[]) {
-  const pieces: { x1: number; x2: number }[] = []
-  let at = from
-  for (const pause of pauses) {
-    if (pause.x1 > at) pieces.push({ x1: at, x2: pause.x1 })
-    at = Math.max(at, pause.x2)
-  }
-  if (to > at) pieces.push({ x1: at, x2: to })
-  return pieces
+  const gaps = pauses.map(({ x1, x2 }) => [x1, x2] as const)
+  return stretchesBetween(from, to, gaps).map(([x1, x2]) => ({ x1, x2 }))
 }
 
 /** Words of a board row. The late ones first: what finds no free place is left out of the drawing, not of the row. */
