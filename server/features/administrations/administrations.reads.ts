@@ -131,7 +131,10 @@ export function readCalculations(
 /** People who were shown the amount of a dose before its two calculations agreed. */
 export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
   const rows: { person_id: string }[] = await db.query(
-    `SELECT s.person_id FROM dose_amounts_seen s WHERE s.order_version_id = $1 AND s.dose_key = $2`,
+    `SELECT DISTINCT s.person_id
+       FROM dose_amounts_seen s
+       JOIN order_versions v ON v.id = s.order_version_id
+      WHERE v.order_id = (SELECT o.order_id FROM order_versions o WHERE o.id = $1) AND s.dose_key = $2`,
     [orderVersionId, doseKey],
   )
   return rows.map((row) => row.person_id)

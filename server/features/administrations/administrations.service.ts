@@ -182,12 +182,10 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const calculations = await parts.calculations(situation.versionId, key, tx)
         const why = obstacles(situation, calculations)
         const measured = situation.judgement?.dose?.measured
-        if (measured && !isAmountNow(situation, amount))
-          why.push(
-            needsSecond(situation) && !secondStands(calculations)
-              ? doseWords.amountDiffersBlind
-              : doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }),
-          )
+        // before the second calculation the answer is the same for every amount: it is not to be found by trying
+        const isOpen = !needsSecond(situation) || secondStands(calculations)
+        if (measured && isOpen && !isAmountNow(situation, amount))
+          why.push(doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }))
         const first = firstOf(calculations)
         if (first && first.lot_id !== given.lotId) why.push(doseWords.secondOutdated)
         if (why.length > 0) throw new Problem('dose-not-possible', { detail: why.join(' '), extra: { why } })

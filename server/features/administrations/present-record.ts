@@ -22,20 +22,23 @@ interface Reader {
   actor: Actor
   zone: string
   now: string
+  /** Whoever may calculate a second time: a record that was struck out tells them no amount. */
+  blind: boolean
 }
 
 export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
+  const isHidden = reader.blind && row.struck_reason !== null
   return {
     id: row.id,
     key: row.dose_key,
     kind: row.kind,
-    amountText: storedText(row.amount_entered_value, row.amount_entered_unit),
+    amountText: isHidden ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
     lotNumber: row.lot_number,
     happenedAt: row.happened_at.toISOString(),
     recordedAt: row.recorded_at.toISOString(),
     by: row.by_name,
     note: row.note,
-    exceptions: JSON.parse(row.exceptions_text) as RecordedDose['exceptions'],
+    exceptions: isHidden ? [] : (JSON.parse(row.exceptions_text) as RecordedDose['exceptions']),
     struck:
       (row.struck_reason !== null &&
         row.struck_at && {

@@ -323,7 +323,7 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
     mayStart: why.length === 0,
     why,
     recorded: [...own, ...struck.filter((one) => one.dose_key === planned.key)].map((record) =>
-      presentRecord(record, records, { actor, zone, now }),
+      presentRecord(record, records, { actor, zone, now, blind: hide }),
     ),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
@@ -364,7 +364,7 @@ export function showsAmountEarly(sheet: BathSheet, calculations: Calculations): 
     !sheet.blind &&
     sheet.secondNeeded &&
     sheet.amountNow !== null &&
-    sheet.recorded.length === 0 &&
+    sheet.recorded.every(({ struck }) => struck !== null) &&
     !secondStands(calculations)
   )
 }
