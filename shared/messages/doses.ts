@@ -27,7 +27,6 @@ export const doseWords = defineMessages({
     `${p.now} is worked out now and ${p.signed} was signed, though the volume has hardly moved; the order allows ${p.allowed}. Somebody changed the strength of the product or another figure. A veterinarian looks, and amends the order.`,
   amountMovedBlind:
     'The amount worked out now is not the one signed, though the volume has hardly moved. Somebody changed the strength of the product or another figure. A veterinarian looks, and amends the order.',
-  amountDiffersBlind: 'The amount is not the one worked out.',
   secondMissing: 'Another person has to calculate the amount without seeing yours.',
   secondDisagrees: 'The two calculations do not agree. Both begin again from the label.',
   firstMissing: 'Ask the first person to calculate.',
@@ -38,7 +37,7 @@ export const doseWords = defineMessages({
   calculatedAloneText: (p: { by: string }) =>
     `Nobody else could be reached. ${p.by} worked it out, and again some minutes later from label, mark and container. A veterinarian reviews it.`,
   amountSeen:
-    'You have been shown the amount of this dose, so your calculation would not be blind. Ask somebody who has not seen it.',
+    'You have been shown the amount of this dose or signed the order, so your calculation would not be blind. Ask somebody who has not seen it.',
   beginAgain: 'The first is worked out anew before the second. Then both begin again from the label.',
   markUnreadable: 'Type the depth as a number with its unit, for example 0.68 m.',
   secondOutdated: 'The lot or the volume has changed since the second calculation. Calculate again.',

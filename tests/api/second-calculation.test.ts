@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
-import { startApi, testDay } from '../support/api.ts'
+import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 
 let api: TestApi
@@ -80,7 +80,7 @@ describe('a second calculation is blind', () => {
       expect((await by.agent.get(`/api/orders.csv?q=${number}`)).text).not.toMatch(shows)
       expect(sent(await blindSheet(number, by))).not.toMatch(shows)
     }
-    // whoever signed it has seen it
+    // whoever signed it has seen it, and is no second person
     const signer = (await (await api.as('veterinarian')).agent.get(url).expect(200)).body
     expect(signer).toMatchObject({
       amountsWithheld: false,
@@ -94,13 +94,59 @@ describe('a second calculation is blind', () => {
     expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
     expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
     expect((await house.second.agent.get(url).expect(200)).body.amountsWithheld).toBe(false)
-    // a wrong amount typed at the tank is no way to be told the right one
-    const guess = await house.give(number, { amount: { value: '1', unit: 'mL' } })
-    expect([guess.status, sent(guess.body).match(shows)]).toEqual([409, null])
+    // typing amounts at the tank is no way to find the right one: the answer is the same for each
+    const guess = async (value: string) => {
+      const { status, body } = await house.give(number, { amount: { value, unit: 'mL' } })
+      return { status, why: body.why, shown: sent(body).match(shows) }
+    }
+    const wrong = await guess('1')
+    expect(wrong).toMatchObject({ status: 409, shown: null })
+    expect(await guess(bathAmount.value)).toEqual(wrong)
     // paper shows it too
     const keeper = await api.as('keeper')
     await keeper.agent.get(`${url}/print`).expect(200)
     expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+  })
+
+  it('also after a record of the dose was struck out, and under a version of the order that was amended since', async () => {
+    const number = await aBathToCalculate()
+    const keeper = await api.as('keeper')
+    const { id } = (await house.record(number).expect(201)).body.recorded[0]
+    await house.technician.agent
+      .post(`/api/dose-records/dose/${id}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'the other tank was meant' })
+      .expect(200)
+    const blind = await blindSheet(number, keeper)
+    expect(blind).toMatchObject({
+      blind: true,
+      secondShut: null,
+      recorded: [{ amountText: null, exceptions: [], struck: { reason: 'the other tank was meant' } }],
+    })
+    expect(JSON.stringify(blind)).not.toMatch(/218/)
+    await keeper.agent.get(house.doseAt(number)).expect(200)
+    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+
+    await house.amend(bath, number, { target: { value: '90', unit: 'uL/L' } })
+    await house.calculateFirst(number).expect(201)
+    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    expect((await keeper.agent.get(`/api/orders/${number}`).expect(200)).body.amountsWithheld).toBe(false)
+  })
+
+  it('nor by whoever signed the order, who has seen what they signed', async () => {
+    const number = await aBathToCalculate()
+    const signer = await api.as('veterinarian')
+    expect((await blindSheet(number, signer)).secondShut).toBe('amount-seen')
+    const own = await house.calculateSecond(bath, number, {}, signer)
+    expect([own.status, own.body.code]).toEqual([403, 'another-person-needed'])
+    expect(own.body.detail).toContain('or signed the order')
+    // nobody else there: as the first one they may repeat it
+    api.clock.set(new Date(testDay.getTime() + 60_000))
+    await house.calculateFirst(number, signer).expect(201)
+    api.clock.set(new Date(testDay.getTime() + 6 * 60_000))
+    const alone = await house.calculateSecond(bath, number, { nobodyReached: true }, signer).expect(201)
+    expect(alone.body.second).toMatchObject({ agrees: true, alone: true })
   })
 
   it('by whoever never made a first one, also when another worked it out again since', async () => {

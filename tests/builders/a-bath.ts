@@ -33,27 +33,37 @@ export async function aFormalinHouse(api: TestApi) {
     const tank = await aBathWater(api, `QT-${String(tanks)}`)
     return { tank, school: await aSchool(api, tank.id, tanks) }
   }
+  const fieldsOf = ({ tank, school }: BathTank, given: object) =>
+    bathFields({
+      enclosureId: tank.id,
+      animalIds: [school.id],
+      productId: formalin.id,
+      lotId: formalin.lotId,
+      target: { value: '100', unit: 'uL/L' },
+      basis: 'product',
+      timing: 'timed',
+      contactMinutes: 45,
+      division: { value: '1', unit: 'mL' },
+      startsAt: '2026-12-01T18:20:00Z',
+      ...given,
+    })
   /** A signed bath of 45 min at 100 µL/L for the school of a tank, due now. */
-  async function signedBath({ tank, school }: BathTank, given: object = {}): Promise<string> {
-    const draft = await aDraft(
-      api,
-      bathFields({
-        enclosureId: tank.id,
-        animalIds: [school.id],
-        productId: formalin.id,
-        lotId: formalin.lotId,
-        target: { value: '100', unit: 'uL/L' },
-        basis: 'product',
-        timing: 'timed',
-        contactMinutes: 45,
-        division: { value: '1', unit: 'mL' },
-        startsAt: '2026-12-01T18:20:00Z',
-        ...given,
-      }),
-    )
+  async function signedBath(bath: BathTank, given: object = {}): Promise<string> {
+    const draft = await aDraft(api, fieldsOf(bath, given))
     const signed = await signDraft(api, draft)
     if (signed.status !== 201) throw new Error(JSON.stringify(signed.body))
     return draft.number
+  }
+  /** The next version of it, signed. */
+  async function amend(bath: BathTank, number: string, given: object): Promise<void> {
+    const { agent } = await api.as('veterinarian')
+    const { version } = (await agent.get(`/api/orders/${number}`).expect(200)).body
+    const draft = await agent
+      .put(`/api/orders/${number}/draft`)
+      .send({ expectedVersion: version, fields: fieldsOf(bath, given) })
+      .expect(200)
+    const signed = await signDraft(api, { number, version: draft.body.version })
+    if (signed.status !== 201) throw new Error(JSON.stringify(signed.body))
   }
   const freshWater = ({ tank }: BathTank) =>
     readingsNow(api, tank.waterBodyId, {
@@ -95,6 +105,7 @@ export async function aFormalinHouse(api: TestApi) {
     doseAt,
     tankWithSchool,
     signedBath,
+    amend,
     freshWater,
     calculateFirst,
     calculateSecond,

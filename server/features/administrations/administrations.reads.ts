@@ -128,13 +128,19 @@ export function readCalculations(
   )
 }
 
-/** People who were shown the amount of a dose before its two calculations agreed. */
+/**
+ * People who know the amount of a dose that they did not work out blind: shown it before its two calculations agreed, under
+ * any version of the order, or signed one. That an amended version has another amount does not make them forget the first.
+ */
 export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
   const rows: { person_id: string }[] = await db.query(
-    `SELECT DISTINCT s.person_id
-       FROM dose_amounts_seen s
-       JOIN order_versions v ON v.id = s.order_version_id
-      WHERE v.order_id = (SELECT o.order_id FROM order_versions o WHERE o.id = $1) AND s.dose_key = $2`,
+    `WITH versions AS (
+       SELECT v.id, v.signed_by FROM order_versions v
+        WHERE v.order_id = (SELECT o.order_id FROM order_versions o WHERE o.id = $1))
+     SELECT s.person_id FROM dose_amounts_seen s JOIN versions v ON v.id = s.order_version_id WHERE s.dose_key = $2
+      UNION SELECT v.signed_by FROM versions v
+      UNION SELECT f.recorded_by FROM dose_calculations f JOIN versions v ON v.id = f.order_version_id
+             WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1`,
     [orderVersionId, doseKey],
   )
   return rows.map((row) => row.person_id)

@@ -180,10 +180,10 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         refuseBroken(situation)
         await refuseOtherLot(tx, situation, given.lotId)
         const calculations = await parts.calculations(situation.versionId, key, tx)
-        const why = obstacles(situation, calculations)
-        const measured = situation.judgement?.dose?.measured
-        // before the second calculation the answer is the same for every amount: it is not to be found by trying
+        // before the second calculation the answer is the same for every amount and names none: it is not to be found by trying
         const isOpen = !needsSecond(situation) || secondStands(calculations)
+        const why = obstacles(situation, calculations, { hide: !isOpen })
+        const measured = situation.judgement?.dose?.measured
         if (measured && isOpen && !isAmountNow(situation, amount))
           why.push(doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }))
         const first = firstOf(calculations)

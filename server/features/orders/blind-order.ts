@@ -10,7 +10,7 @@ import type { OrderReadRow } from './orders.reads.ts'
  */
 export function isBlindTo(row: OrderReadRow, now: string, actor: Actor): boolean {
   const keys = blindKeys(row, now)
-  if (keys.length === 0 || row.signed_by === actor.personId) return false
+  if (keys.length === 0 || row.signers.some((id) => id === actor.personId)) return false
   if (!decide('dose.calculate-second', actor.roles, { 'another-person': true }).allowed) return false
   const known = new Set(
     row.knowers.filter(({ personId }) => personId === actor.personId).map(({ key }) => key),

@@ -35,9 +35,9 @@ export interface OrderReadRow {
   held: boolean
   ended: boolean
   done_keys: string[]
-  /** Who signed the version in force. */
-  signed_by: string | null
-  /** Who knows the amount of which of its doses: shown it, or the first to work it out. */
+  /** Who signed a version of it. */
+  signers: string[]
+  /** Who knows the amount of which of its doses, under any of its versions: shown it, or the first to work it out. */
   knowers: { personId: string; key: string }[]
   given: number
   /** A timed bath went in and has no end. */
@@ -66,7 +66,7 @@ const columns = `
   o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
   o.created_at, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
   coalesce(v.agent, f.agent) AS agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
-  v.signed_at, v.signed_by, s.printed_name AS signed_by_name, t.text AS signed_text,
+  v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
              ORDER BY e.recorded_at DESC, e.happened_at DESC LIMIT 1), false) AS held,
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
@@ -78,9 +78,11 @@ const columns = `
            WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND x.contact_minutes IS NOT NULL
              AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)) AS running,
   coalesce((SELECT json_agg(json_build_object('personId', k.person_id, 'key', k.dose_key)) FROM (
-     SELECT m.person_id, m.dose_key FROM dose_amounts_seen m WHERE m.order_version_id = v.id
-      UNION SELECT l.recorded_by, l.dose_key FROM dose_calculations l
-             WHERE l.order_version_id = v.id AND l.part = 'first') k), '[]') AS knowers,
+     SELECT m.person_id, m.dose_key FROM dose_amounts_seen m JOIN order_versions x ON x.id = m.order_version_id
+      WHERE x.order_id = o.id
+      UNION SELECT l.recorded_by, l.dose_key FROM dose_calculations l JOIN order_versions x ON x.id = l.order_version_id
+             WHERE x.order_id = o.id AND l.part = 'first') k), '[]') AS knowers,
+  coalesce((SELECT array_agg(DISTINCT x.signed_by) FROM order_versions x WHERE x.order_id = o.id), '{}') AS signers,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
 
