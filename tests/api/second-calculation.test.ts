@@ -121,7 +121,7 @@ describe('a second calculation is blind', () => {
     expect(blind).toMatchObject({
       blind: true,
       secondShut: null,
-      recorded: [{ amountText: null, exceptions: [], struck: { reason: 'the other tank was meant' } }],
+      recorded: [{ amountText: null, struck: { reason: 'the other tank was meant' } }],
     })
     expect(JSON.stringify(blind)).not.toMatch(/218/)
     await keeper.agent.get(house.doseAt(number)).expect(200)
@@ -132,6 +132,55 @@ describe('a second calculation is blind', () => {
     expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
     expect((await blindSheet(number, house.second)).secondShut).toBeNull()
     expect((await keeper.agent.get(`/api/orders/${number}`).expect(200)).body.amountsWithheld).toBe(false)
+  })
+
+  it('and the doses of one order have one amount: whoever sees it at the first is no second person of the next', async () => {
+    const number = await house.signedBath(bath, { doses: 3, intervalHours: 24 })
+    await house.freshWater(bath)
+    await house.calculateFirst(number).expect(201)
+    await house.calculateSecond(bath, number).expect(201)
+    const { id } = (await house.give(number).expect(201)).body.recorded[0]
+    const keeper = await api.as('keeper')
+    const sent = (body: object) => JSON.stringify(body).replaceAll('\u00a0', ' ')
+    const shows = /21[89](\.1\d*)? ?mL|"21[89]"|218\.1/
+    const next = async (by: TestPerson) =>
+      (await by.agent.get(`${house.doseAt(number).replace('/1', '/2')}?blind=yes`).expect(200)).body
+        .secondShut
+
+    // neither the sheet of the bath that runs, nor the reply to stopping it, nor the worklist names it
+    const running = await blindSheet(number, keeper)
+    expect(running).toMatchObject({ blind: true, state: 'running', recorded: [{ amountText: null }] })
+    expect(sent(running)).not.toMatch(shows)
+    const today = async (by: TestPerson) => {
+      const { items, log } = (await by.agent.get('/api/today').expect(200)).body
+      return sent([...items, ...log].filter((one) => Object.values(one.params).includes(number)))
+    }
+    expect(await today(keeper)).toContain(number)
+    expect(await today(keeper)).not.toMatch(shows)
+    api.clock.set(new Date(testDay.getTime() + 45 * 60_000))
+    const stopped = await keeper.agent
+      .post(`/api/doses/${id}/stops`)
+      .send({ id: api.nextId(), happenedAt: api.clock.now().toISOString(), cause: 'time-up' })
+      .expect(201)
+    expect(stopped.body).toMatchObject({ state: 'done', recorded: [{ amountText: null }] })
+    expect(sent(stopped.body)).not.toMatch(shows)
+    expect(await today(keeper)).not.toMatch(shows)
+    expect(await next(keeper)).toBe('no-first')
+
+    // who worked it out blind has earned it, who signed it knows it, and who is shown it is remembered
+    expect(await next(house.second)).toBe('no-first')
+    expect(await today(await api.as('veterinarian'))).toMatch(shows)
+    const whole = await keeper.agent.get(house.doseAt(number)).expect(200)
+    expect(sent(whole.body)).toMatch(shows)
+    api.clock.set(new Date(testDay.getTime() + 24 * 60 * 60_000))
+    await house.freshWater(bath)
+    const second = house.doseAt(number).replace('/1', '/2')
+    await house.technician.agent
+      .post(`${second}/first-calculation`)
+      .send({ id: api.nextId(), lotId: house.formalin.lotId })
+      .expect(201)
+    expect(await next(keeper)).toBe('amount-seen')
+    expect(await next(house.second)).toBeNull()
   })
 
   it('nor by whoever signed the order, who has seen what they signed', async () => {

@@ -47,7 +47,8 @@ export function administrationRoutes(
     }),
     route(contracts.recordDose, async ({ params, body, context }) => {
       await service.recordDose(context, params.number, params.key, body)
-      return queries.sheet(params.number, params.key, false, context)
+      // whoever records it may be the second person of the next
+      return queries.sheet(params.number, params.key, true, context)
     }),
     route(contracts.strikeDoseRecord, async ({ params, body, context }) => {
       const doseId = await service.strikeDoseRecord(context, params, body)

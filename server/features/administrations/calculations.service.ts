@@ -22,19 +22,26 @@ const allowedDrift = ({ content }: DoseSituation) => content.fields.allowedVolum
 /** The two calculations of one dose: the first for the lot in the hand, the second by another person, blind. */
 export function createCalculations(parts: AdministrationsParts) {
   return {
-    /** Remembers that somebody was shown the amount before the two calculations agreed. */
+    /** Remembers that somebody was shown the amount of doses before their two calculations agreed. */
     async noteSeen(
       context: RequestContext,
-      seen: { orderVersionId: string; doseKey: string; order: { id: string; number: string } },
+      seen: {
+        orderVersionId: string
+        doseKeys: readonly string[]
+        order: { id: string; number: string }
+      },
     ): Promise<void> {
       await parts.transactions.inTransaction(context, async (tx) => {
-        const { orderVersionId, doseKey } = seen
-        const row = { id: parts.ids.next(), orderVersionId, doseKey, personId: personOf(tx) }
-        if (await insertSeen(tx, row))
+        const { orderVersionId } = seen
+        const fresh: string[] = []
+        for (const doseKey of seen.doseKeys)
+          if (await insertSeen(tx, { id: parts.ids.next(), orderVersionId, doseKey, personId: personOf(tx) }))
+            fresh.push(doseKey)
+        if (fresh.length > 0)
           tx.audit({
             action: 'dose.see-amount',
             subject: { kind: 'order', id: seen.order.id, label: seen.order.number },
-            after: { key: doseKey },
+            after: { keys: fresh },
           })
       })
     },

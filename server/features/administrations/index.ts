@@ -17,8 +17,8 @@ import { DoseOverrideRow } from './dose-override.entity.ts'
 import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 import { readDoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
-import { presentSheet, showsAmountEarly } from './present-sheet.ts'
-import { firstOf } from './second-person.ts'
+import { isShownEarly, presentSheet, showsAmount } from './present-sheet.ts'
+import { firstOf, workedOutBlind } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
@@ -57,13 +57,25 @@ export function createAdministrations(
     if (lotId === null || lotId === situation.content.fields.lotId) return { situation, calculations }
     return { situation: await readDoseSituation(outside, number, key, now(), { lotId }), calculations }
   }
-  /** The sheet for somebody. Whoever is shown the amount before the two calculations agree is remembered. */
+  /**
+   * The sheet for somebody. Whoever is shown the amount before the two calculations agree is remembered, for the other
+   * doses to come as well: they have the same one. Whoever worked it out blind themselves has earned it.
+   */
   async function sheetFor(context: RequestContext, number: string, key: string, blind: boolean) {
     const found = await read(number, key)
-    const sheet = presentSheet({ ...found, blind, actor: context.actor, now: now().toISOString() })
+    const { actor } = context
+    const elsewhere = (await orders.queries.amountsToNote(number, actor)).keys.filter(
+      (other) => other !== key,
+    )
+    const mayBeSecondElsewhere = elsewhere.length > 0
+    const sheet = presentSheet({ ...found, blind, mayBeSecondElsewhere, actor, now: now().toISOString() })
     const { versionId, row } = found.situation
-    if (showsAmountEarly(sheet, found.calculations))
-      await service.noteSeen(context, { orderVersionId: versionId, doseKey: key, order: row })
+    const learnt = [
+      ...(isShownEarly(sheet, found.calculations) ? [key] : []),
+      ...(showsAmount(sheet) && !workedOutBlind(found.calculations, actor) ? elsewhere : []),
+    ]
+    if (learnt.length > 0)
+      await service.noteSeen(context, { orderVersionId: versionId, doseKeys: learnt, order: row })
     return { ...found, sheet }
   }
   const print = createSheetPrinter({ ...parts, documents: parts.documents.service, sheetFor })
@@ -71,10 +83,11 @@ export function createAdministrations(
   const due = { dataSource, queries: orders.queries, now }
   const queries: AdministrationsQueries = {
     sheet: async (number, key, blind, context) => (await sheetFor(context, number, key, blind)).sheet,
+    /** Left without amounts: whoever ends a bath or strikes a record out may be the second person of the next. */
     async sheetOfDose(doseId, context) {
       const found = await readOrderNumberOfDose(dataSource, doseId)
       if (!found) throw new Problem('not-found')
-      return queries.sheet(found.number, found.key, false, context)
+      return queries.sheet(found.number, found.key, true, context)
     },
     due: (query) => findDueDoses(due, query),
   }

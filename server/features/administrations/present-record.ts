@@ -3,6 +3,7 @@ import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { DoseReadRow, OtherStop } from './administrations.reads.ts'
@@ -22,23 +23,22 @@ interface Reader {
   actor: Actor
   zone: string
   now: string
-  /** Whoever may calculate a second time: a record that was struck out tells them no amount. */
+  /** Whoever may still calculate a dose of the order blind: what was recorded tells them no amount. */
   blind: boolean
 }
 
 export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
-  const isHidden = reader.blind && row.struck_reason !== null
   return {
     id: row.id,
     key: row.dose_key,
     kind: row.kind,
-    amountText: isHidden ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
+    amountText: reader.blind ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
     lotNumber: row.lot_number,
     happenedAt: row.happened_at.toISOString(),
     recordedAt: row.recorded_at.toISOString(),
     by: row.by_name,
     note: row.note,
-    exceptions: isHidden ? [] : (JSON.parse(row.exceptions_text) as RecordedDose['exceptions']),
+    exceptions: saidExceptions(row, reader),
     struck:
       (row.struck_reason !== null &&
         row.struck_at && {
@@ -70,6 +70,13 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
       }),
     otherStops: row.other_stops.map((stop) => presentStop(row, reader, stop)),
   }
+}
+
+/** What the record breaks; an amount in the words of it is left out with the others. */
+function saidExceptions(row: DoseReadRow, { blind }: Reader): RecordedDose['exceptions'] {
+  const found = JSON.parse(row.exceptions_text) as RecordedDose['exceptions']
+  if (!blind) return found
+  return found.map((one) => (one.code === 'amount-differs' ? { ...one, text: doseWords.amountLeftOut } : one))
 }
 
 function presentStop(row: DoseReadRow, reader: Reader, stop: OtherStop): NonNullable<RecordedDose['stop']> {

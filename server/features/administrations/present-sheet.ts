@@ -247,15 +247,19 @@ export interface SheetRequest {
   situation: DoseSituation
   calculations: Calculations
   blind: boolean
+  /** Another dose of the order is to come that this person may calculate blind: its amount is that of this one. */
+  mayBeSecondElsewhere: boolean
   actor: Actor
   now: string
 }
 
 /**
  * The sheet of one dose. For the person who calculates a second time, every amount is left out on the server until the
- * two agree: after a disagreement both begin again from the label, and the second is still blind.
+ * two agree: after a disagreement both begin again from the label, and the second is still blind. What a recorded dose was
+ * stays left out for whoever may be the second person of another one.
  */
-export function presentSheet({ situation, calculations, blind, actor, now }: SheetRequest): BathSheet {
+export function presentSheet(request: SheetRequest): BathSheet {
+  const { situation, calculations, blind, actor, now } = request
   const { content, judgement, answer, drift, product, planned, records, struck } = situation
   const { fields } = content
   const zone = judgement?.facts.zone ?? 'UTC'
@@ -263,8 +267,9 @@ export function presentSheet({ situation, calculations, blind, actor, now }: She
   const first = firstOf(calculations)
   const second = secondOf(calculations)
   const own = records.filter((record) => record.dose_key === planned.key)
-  const hide = blind && own.length === 0 && !secondStands(calculations)
-  const hideLot = hide && first !== undefined
+  const isOpen = own.length === 0
+  const hide = blind && (isOpen ? !secondStands(calculations) : request.mayBeSecondElsewhere)
+  const hideLot = hide && isOpen && first !== undefined
   const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
   const calendar = presentCalendar(situation.plan, records, course, now)
   const why = obstacles(situation, calculations, { hide })
@@ -358,16 +363,19 @@ function leftTheWater(situation: DoseSituation): BathSheet['cautions'] {
   ]
 }
 
-/** Whether a sheet shows the amount of a dose whose second calculation is still to come. */
-export function showsAmountEarly(sheet: BathSheet, calculations: Calculations): boolean {
-  return (
-    !sheet.blind &&
-    sheet.secondNeeded &&
-    sheet.amountNow !== null &&
-    sheet.recorded.every(({ struck }) => struck !== null) &&
-    !secondStands(calculations)
-  )
-}
+/** Whether a sheet shows any amount of its dose: signed, worked out, or recorded. */
+export const showsAmount = (sheet: BathSheet): boolean =>
+  !sheet.blind &&
+  (sheet.signedAmountText !== null ||
+    sheet.amountNow !== null ||
+    sheet.recorded.some(({ amountText }) => amountText !== null))
+
+/** Whether the amount of a dose is shown whose second calculation is still to come. */
+export const isShownEarly = (sheet: BathSheet, calculations: Calculations): boolean =>
+  showsAmount(sheet) &&
+  sheet.secondNeeded &&
+  sheet.recorded.every(({ struck }) => struck !== null) &&
+  !secondStands(calculations)
 
 /** What an order opens to keepers is feed and topical, so giving a bath is decided; who calculated first is not known here. */
 const factsOfBath = (action: Action) => (action === 'dose.give' ? {} : undefined)

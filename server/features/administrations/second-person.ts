@@ -47,6 +47,12 @@ export function repeatFrom(calculations: Calculations, actor: Actor): Date | nul
     : new Date(first.recorded_at.getTime() + repeatAfterMinutes * 60_000)
 }
 
+/** Whether a person made the second calculation that stands, as another than who made the first. */
+export const workedOutBlind = (calculations: Calculations, actor: Actor): boolean =>
+  secondStands(calculations) &&
+  secondOf(calculations)?.recorded_by === actor.personId &&
+  !wasRepeatedAlone(calculations)
+
 /** Whether the second calculation that stands is a repeat by the person of the first. */
 export function wasRepeatedAlone(calculations: Calculations): boolean {
   const second = secondOf(calculations)

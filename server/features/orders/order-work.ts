@@ -1,5 +1,7 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { Db } from '../../platform/database/db.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import { isBlindTo } from './blind-order.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
 import { asksForSecond, plannedOf, presentOrderRow } from './orders.present.ts'
@@ -25,7 +27,8 @@ export function openOrders(rows: readonly OrderReadRow[], now: string) {
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
     if (!isOpen || row.starts_at === null || row.doses === null) return []
     const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
-    return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
+    const isBlind = (actor: Actor) => isBlindTo(row, now, actor)
+    return [{ row: shown, plan, secondCalculation: asksForSecond(row), isBlindTo: isBlind }]
   })
 }
 

@@ -29,11 +29,18 @@ export async function gatherDoses(
 ): Promise<GatheredDoses> {
   const until = startOfFacilityDay(addDays(moment.on, 2), moment.zone)
   const since = (hours: number) => new Date(addHours(moment.at, -hours))
-  const [due, recent, seconds] = await Promise.all([
+  const [due, happened, seconds] = await Promise.all([
     administrations.work.dueDoses(until, open),
     administrations.work.recentDoses(since(exceptionsShownHours)),
     administrations.work.wantedSeconds(since(secondsShownHours)),
   ])
+  // what went in is what goes in next: it is left out for whoever may calculate another dose of the order blind
+  const blindOrders = new Set(
+    open.filter((order) => order.isBlindTo(moment.actor)).map(({ row }) => row.number),
+  )
+  const recent = happened.map((row) =>
+    blindOrders.has(row.number) ? { ...row, amount_entered_value: null, amount_entered_unit: null } : row,
+  )
   const mayStop = decide('bath.stop', moment.actor.roles).allowed
   const blind = seconds.filter((row) => row.first_by !== moment.actor.personId)
   // Whoever may calculate a second time is shown no amount beforehand

@@ -79,7 +79,7 @@ function useKeptRunning(number: string, doseKey: string, wanted: boolean): void 
 function looksAgain(sheet: BathSheetReply | undefined, error: Error | null): boolean {
   if (isUnanswered(error)) return true
   if (sheet === undefined) return false
-  return waitsForOthers(sheet) || (!sheet.blind && othersMayAct(sheet))
+  return waitsForOthers(sheet) || ((!sheet.blind || sheet.state === 'running') && othersMayAct(sheet))
 }
 
 /** The sheet of an order without a dose in its address: leads to the dose that is meant now. */

@@ -2,8 +2,10 @@ import { useState } from 'react'
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { newId } from '../../lib/new-id.ts'
+import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
+import { ButtonLink } from '../../ui/button-link.tsx'
 import { CautionBlock } from '../../ui/caution-block.tsx'
 import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { Tag } from '../../ui/tag.tsx'
@@ -19,6 +21,9 @@ const kindWords = (kind: RecordedDose['kind']) =>
     refused: words.kindRefused,
   })[kind]
 
+/** Amounts of what was recorded are left out for whoever may calculate another dose. */
+const isLeftOut = ({ blind, state }: BathSheet) => blind && (state === 'running' || state === 'done')
+
 /** Everything recorded of this dose: what, when, by whom, how it ended, and what a veterinarian has to look at. */
 export function RecordedDoses({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   if (sheet.recorded.length === 0) return null
@@ -28,6 +33,14 @@ export function RecordedDoses({ sheet, zone }: { sheet: BathSheet; zone: string 
       {sheet.recorded.map((record) => (
         <OneRecord key={record.id} record={record} sheet={sheet} zone={zone} />
       ))}
+      {isLeftOut(sheet) ? (
+        <>
+          <p className="t-note">{words.recordedLeftOut}</p>
+          <ButtonLink kind="plain" to={`${paths.orderSheet(sheet.number)}?dose=${sheet.key}&part=whole`}>
+            {words.showRecorded}
+          </ButtonLink>
+        </>
+      ) : null}
     </section>
   )
 }

@@ -82,8 +82,8 @@ export function RunningSteps({
   const out = { at: at(new Date(endsMs).toISOString()) }
   return (
     <Conditions
-      heading={record.amountText ?? ''}
-      note={[sheet.drug, record.lotNumber].filter(Boolean).join(', ')}
+      heading={record.amountText ?? sheet.drug}
+      note={[record.amountText === null ? null : sheet.drug, record.lotNumber].filter(Boolean).join(', ')}
       conditions={[
         {
           key: 'in',

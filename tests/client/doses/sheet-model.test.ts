@@ -126,6 +126,13 @@ describe('whether somebody is shown amounts', () => {
     expect(sheetMode(blind({ secondShut: 'no-first' }), null)).toBe('same')
     expect(sheetMode(blind({ secondShut: 'no-first' }), 'whole')).toBe('whole')
   })
+  it('fetches them for nobody who looks at a bath that runs or is over', () => {
+    const recorded = { first, second, recorded: [record()] }
+    for (const state of ['running', 'done'] as const) {
+      expect(sheetMode(blind({ ...recorded, state }), null)).toBe('same')
+      expect(sheetMode(blind({ ...recorded, state }), 'whole')).toBe('whole')
+    }
+  })
   it('needs no second reading where the server left nothing out', () => {
     expect(sheetMode(sheet({ first, second }), null)).toBe('same')
   })
