@@ -36,7 +36,7 @@ export const doseWords = defineMessages({
   calculatedAlone: 'No second person calculated the amount',
   calculatedAloneText: (p: { by: string }) =>
     `Nobody else could be reached. ${p.by} worked it out, and again some minutes later from label, mark and container. A veterinarian reviews it.`,
-  amountLeftOut: 'The amounts are left out here: you may calculate another dose of this order blind.',
+  amountLeftOut: 'The amounts are left out here: you may still calculate a dose of this order blind.',
   amountSeen:
     'You have been shown the amount of this dose or signed the order, so your calculation would not be blind. Ask somebody who has not seen it.',
   beginAgain: 'The first is worked out anew before the second. Then both begin again from the label.',

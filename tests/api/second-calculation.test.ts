@@ -117,6 +117,9 @@ describe('a second calculation is blind', () => {
       .set('Idempotency-Key', newKey())
       .send({ reason: 'the other tank was meant' })
       .expect(200)
+    expect((await blindSheet(number, house.technician)).recorded).toMatchObject([
+      { amountText: '218\u00a0mL' },
+    ])
     const blind = await blindSheet(number, keeper)
     expect(blind).toMatchObject({
       blind: true,
@@ -159,7 +162,7 @@ describe('a second calculation is blind', () => {
     expect(await today(keeper)).not.toMatch(shows)
     api.clock.set(new Date(testDay.getTime() + 45 * 60_000))
     const stopped = await keeper.agent
-      .post(`/api/doses/${id}/stops`)
+      .post(`/api/doses/${id}/stop`)
       .send({ id: api.nextId(), happenedAt: api.clock.now().toISOString(), cause: 'time-up' })
       .expect(201)
     expect(stopped.body).toMatchObject({ state: 'done', recorded: [{ amountText: null }] })

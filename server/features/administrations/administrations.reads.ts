@@ -129,8 +129,8 @@ export function readCalculations(
 }
 
 /**
- * People who know the amount of a dose that they did not work out blind: shown it before its two calculations agreed, under
- * any version of the order, or signed one. That an amended version has another amount does not make them forget the first.
+ * People who know the amount of a dose that they did not work out blind: shown it before its two calculations agreed, or
+ * recorded one, under any version of the order, or signed it. That an amended version has another amount does not make them forget the first.
  */
 export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
   const rows: { person_id: string }[] = await db.query(
@@ -140,7 +140,9 @@ export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string
      SELECT s.person_id FROM dose_amounts_seen s JOIN versions v ON v.id = s.order_version_id WHERE s.dose_key = $2
       UNION SELECT v.signed_by FROM versions v
       UNION SELECT f.recorded_by FROM dose_calculations f JOIN versions v ON v.id = f.order_version_id
-             WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1`,
+             WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1
+      UNION SELECT d.recorded_by FROM doses d JOIN versions v ON v.id = d.order_version_id
+             WHERE d.dose_key = $2 AND d.amount_entered_value IS NOT NULL`,
     [orderVersionId, doseKey],
   )
   return rows.map((row) => row.person_id)

@@ -27,18 +27,21 @@ interface Reader {
   blind: boolean
 }
 
+/** Whoever recorded an amount knows it. */
+const isLeftOut = (row: DoseReadRow, { blind, actor }: Reader) => blind && row.recorded_by !== actor.personId
+
 export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], reader: Reader): RecordedDose {
   return {
     id: row.id,
     key: row.dose_key,
     kind: row.kind,
-    amountText: reader.blind ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
+    amountText: isLeftOut(row, reader) ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
     lotNumber: row.lot_number,
     happenedAt: row.happened_at.toISOString(),
     recordedAt: row.recorded_at.toISOString(),
     by: row.by_name,
     note: row.note,
-    exceptions: saidExceptions(row, reader),
+    exceptions: saidExceptions(row, isLeftOut(row, reader)),
     struck:
       (row.struck_reason !== null &&
         row.struck_at && {
@@ -73,9 +76,9 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
 }
 
 /** What the record breaks; an amount in the words of it is left out with the others. */
-function saidExceptions(row: DoseReadRow, { blind }: Reader): RecordedDose['exceptions'] {
+function saidExceptions(row: DoseReadRow, leftOut: boolean): RecordedDose['exceptions'] {
   const found = JSON.parse(row.exceptions_text) as RecordedDose['exceptions']
-  if (!blind) return found
+  if (!leftOut) return found
   return found.map((one) => (one.code === 'amount-differs' ? { ...one, text: doseWords.amountLeftOut } : one))
 }
 

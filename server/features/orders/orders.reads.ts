@@ -37,7 +37,7 @@ export interface OrderReadRow {
   done_keys: string[]
   /** Who signed a version of it. */
   signers: string[]
-  /** Who knows the amount of which of its doses, under any of its versions: shown it, or the first to work it out. */
+  /** Who knows the amount of which of its doses, under any of its versions: shown it, the first to work it out, or who recorded one. */
   knowers: { personId: string; key: string }[]
   given: number
   /** A timed bath went in and has no end. */
@@ -81,7 +81,9 @@ const columns = `
      SELECT m.person_id, m.dose_key FROM dose_amounts_seen m JOIN order_versions x ON x.id = m.order_version_id
       WHERE x.order_id = o.id
       UNION SELECT l.recorded_by, l.dose_key FROM dose_calculations l JOIN order_versions x ON x.id = l.order_version_id
-             WHERE x.order_id = o.id AND l.part = 'first') k), '[]') AS knowers,
+             WHERE x.order_id = o.id AND l.part = 'first'
+      UNION SELECT d.recorded_by, d.dose_key FROM doses d JOIN order_versions x ON x.id = d.order_version_id
+             WHERE x.order_id = o.id AND d.amount_entered_value IS NOT NULL) k), '[]') AS knowers,
   coalesce((SELECT array_agg(DISTINCT x.signed_by) FROM order_versions x WHERE x.order_id = o.id), '{}') AS signers,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
