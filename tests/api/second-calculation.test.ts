@@ -186,6 +186,20 @@ describe('a second calculation is blind', () => {
     expect(await next(house.second)).toBeNull()
   })
 
+  it('nor by whoever worked the same drug out for the same water, as an order being written', async () => {
+    const other = await house.tankWithSchool()
+    const number = await aBathToCalculate()
+    const preview = async (of: BathTank, given: object = {}) =>
+      (await house.second.agent.post('/api/order-previews').send(house.fieldsOf(of, given)).expect(200)).body
+        .amount
+    expect(await preview(other)).not.toBeNull()
+    expect(await preview(bath, { target: null })).toBeNull()
+    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    expect(await preview(bath)).toMatchObject({ measured: bathAmount })
+    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
+  })
+
   it('nor by whoever signed the order, who has seen what they signed', async () => {
     const number = await aBathToCalculate()
     const signer = await api.as('veterinarian')

@@ -33,7 +33,7 @@ export async function aFormalinHouse(api: TestApi) {
     const tank = await aBathWater(api, `QT-${String(tanks)}`)
     return { tank, school: await aSchool(api, tank.id, tanks) }
   }
-  const fieldsOf = ({ tank, school }: BathTank, given: object) =>
+  const fieldsOf = ({ tank, school }: BathTank, given: object = {}) =>
     bathFields({
       enclosureId: tank.id,
       animalIds: [school.id],
@@ -104,6 +104,7 @@ export async function aFormalinHouse(api: TestApi) {
     technician,
     doseAt,
     tankWithSchool,
+    fieldsOf,
     signedBath,
     amend,
     freshWater,

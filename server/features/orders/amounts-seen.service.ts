@@ -1,11 +1,15 @@
+import type { Db } from '../../platform/database/db.ts'
 import type { Transactions } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
 import { insertSeen } from './amounts-seen.repository.ts'
+import type { OrderSituation } from './order-situation.ts'
 import type { OrderQueries } from './orders.queries.ts'
+import { readNumbersLike } from './orders.reads.ts'
 
 export type NoteAmountsSeen = (context: RequestContext, number: string) => Promise<void>
+export type NoteAmountsPreviewed = (context: RequestContext, found: OrderSituation) => Promise<void>
 
 /** Remembers that the order itself showed somebody the amount: they are not the blind second person of its doses to come. */
 export function createAmountsSeen(parts: {
@@ -30,5 +34,21 @@ export function createAmountsSeen(parts: {
           after: { keys: fresh },
         })
     })
+  }
+}
+
+/**
+ * Whoever works an order out while it is being written is shown what the same drug in the same water comes to: of the
+ * orders in force for it as well.
+ */
+export function createAmountsPreviewed(parts: {
+  dataSource: Db
+  noteAmountsSeen: NoteAmountsSeen
+}): NoteAmountsPreviewed {
+  return async (context, { situation, product, judgement }) => {
+    if (!product || !judgement?.dose) return
+    const enclosureIds = situation.water.enclosures.map(({ id }) => id)
+    const numbers = await readNumbersLike(parts.dataSource, { enclosureIds, agent: product.agent })
+    for (const number of numbers) await parts.noteAmountsSeen(context, number)
   }
 }

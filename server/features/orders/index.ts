@@ -13,7 +13,7 @@ import type { Formulary } from '../formulary/index.ts'
 import type { TreatmentsService } from '../quarantine/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { Water } from '../water/index.ts'
-import { createAmountsSeen } from './amounts-seen.service.ts'
+import { createAmountsPreviewed, createAmountsSeen } from './amounts-seen.service.ts'
 import { createBathFactsReader } from './bath-facts.ts'
 import {
   AgentExperience,
@@ -82,6 +82,7 @@ export function createOrders(parts: OrdersOutside) {
   })
   const queries = createOrderQueries({ dataSource, signing, now })
   const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
+  const noteAmountsPreviewed = createAmountsPreviewed({ dataSource, noteAmountsSeen })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)
@@ -104,7 +105,15 @@ export function createOrders(parts: OrdersOutside) {
     /** Orders with something to decide, and the plans of the open ones, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString()),
     answerForPrint,
-    routes: orderRoutes({ service, queries, situation, now, noteAmountsSeen, print }),
+    routes: orderRoutes({
+      service,
+      queries,
+      situation,
+      now,
+      noteAmountsSeen,
+      noteAmountsPreviewed,
+      print,
+    }),
   }
 }
 

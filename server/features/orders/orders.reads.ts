@@ -119,6 +119,24 @@ export async function readOrder(db: Db, number: string): Promise<OrderReadRow | 
   return row ?? null
 }
 
+/** Orders for a drug in some enclosures with a dose to come: an amount worked out there is theirs as well. */
+export async function readNumbersLike(
+  db: Db,
+  { enclosureIds, agent }: { enclosureIds: readonly string[]; agent: string },
+): Promise<string[]> {
+  const rows: { number: string }[] = await db.query(
+    `SELECT DISTINCT o.number
+       FROM order_versions v JOIN orders o ON o.id = v.order_id
+      WHERE v.enclosure_id = ANY($1::uuid[]) AND v.agent = $2
+        AND NOT EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued')
+        AND (SELECT count(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+              WHERE x.order_id = o.id) < v.doses
+      ORDER BY o.number`,
+    [enclosureIds, agent],
+  )
+  return rows.map(({ number }) => number)
+}
+
 export interface VersionReadRow {
   id: string
   version_no: number

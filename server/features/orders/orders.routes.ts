@@ -3,7 +3,7 @@ import { csvReply } from '../../platform/http/csv-reply.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
-import type { NoteAmountsSeen } from './amounts-seen.service.ts'
+import type { NoteAmountsPreviewed, NoteAmountsSeen } from './amounts-seen.service.ts'
 import { ordersCsvColumns } from './orders-csv.ts'
 import { readSituation, refuseUnfit } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
@@ -17,12 +17,13 @@ export interface OrderRouteParts {
   situation: SituationParts
   now(): Date
   noteAmountsSeen: NoteAmountsSeen
+  noteAmountsPreviewed: NoteAmountsPreviewed
   /** The PDF of a signed version, and a note that it was printed. */
   print(number: string, version: number | undefined, actor: Actor, requestId: string): Promise<Uint8Array>
 }
 
 export function orderRoutes(parts: OrderRouteParts): Route[] {
-  const { service, queries, situation, now, noteAmountsSeen, print } = parts
+  const { service, queries, situation, now, noteAmountsSeen, noteAmountsPreviewed, print } = parts
   return [
     route(contracts.listOrders, ({ query }) => queries.list(query)),
     route(contracts.listOrdersCsv, async ({ query }) =>
@@ -32,11 +33,13 @@ export function orderRoutes(parts: OrderRouteParts): Route[] {
       if (query.amounts === 'yes') await noteAmountsSeen(context, params.number)
       return queries.order(params.number, context.actor)
     }),
-    route(contracts.previewOrder, async ({ body, query }) => {
+    route(contracts.previewOrder, async ({ body, query, context }) => {
       await refuseUnfit(situation, body, now())
       // an order that is amended is not another order beside itself
       const exceptOrderId = query.order === undefined ? null : await queries.idOf(query.order)
-      return presentPreview(body, await readSituation(situation, body, now(), { exceptOrderId }))
+      const found = await readSituation(situation, body, now(), { exceptOrderId })
+      await noteAmountsPreviewed(context, found)
+      return presentPreview(body, found)
     }),
     route(contracts.draftOrder, async ({ body, context }) => {
       const { number } = await service.draftOrder(context, body.id, body.fields)
