@@ -63,7 +63,6 @@ export function compose(outside: Outside) {
   const people = createPeople({ ...parts, facility: facility.service, lockout })
   const authenticator = createAuthenticator(people)
   const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
-  const audit = createAudit(parts)
   const signer = createSigner(path.join(outside.dataFolder, 'keys'))
   const signing = createSigning({ ...parts, signer, facility: facility.service, people })
   const enclosures = createEnclosures(parts)
@@ -104,6 +103,7 @@ export function compose(outside: Outside) {
     documents,
     treatments: quarantine.services.treatments,
   })
+  const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
   const administrations = createAdministrations({
     ...parts,
     facility: facility.service,

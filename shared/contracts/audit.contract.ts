@@ -10,6 +10,9 @@ export const AuditEntry = z.object({
   subjectKind: z.string().describe('Kind of record'),
   subjectLabel: z.string().describe('The record as people know it'),
   withheld: z.boolean().describe('Clinical text that the reader may not see was left out'),
+  amountLeftOut: z
+    .boolean()
+    .describe('The amount of a dose was left out: the reader may still calculate one of its order blind'),
   before: z.unknown().describe('What it was'),
   after: z.unknown().describe('What it became'),
   hash: z.string().describe('Hash of this entry, which covers the one before'),

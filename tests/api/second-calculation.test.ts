@@ -200,6 +200,33 @@ describe('a second calculation is blind', () => {
     expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
   })
 
+  it('so the audit trail names no amount of it to a veterinarian who may be asked, and all of it to who signed', async () => {
+    const other = await api.person({
+      email: 'vet2@harrow-point.example',
+      printedName: 'Second veterinarian',
+      roles: ['veterinarian'],
+    })
+    const number = await aBathToCalculate()
+    const entry = async (by: TestPerson) => {
+      const { rows } = (await by.agent.get(`/api/audit?q=${number}`).expect(200)).body
+      return rows.find((row: { action: string }) => row.action === 'dose.calculate-first')
+    }
+    const lotId = house.formalin.lotId
+    expect(await entry(other)).toMatchObject({
+      amountLeftOut: true,
+      withheld: false,
+      after: { key: '1', lotId },
+    })
+    expect((await entry(other)).after).not.toHaveProperty('amount')
+    const signer = await api.as('veterinarian')
+    for (const by of [signer, house.technician])
+      expect(await entry(by)).toMatchObject({ amountLeftOut: false, after: { amount: bathAmount } })
+    expect((await blindSheet(number, other)).secondShut).toBeNull()
+    await house.calculateSecond(bath, number, {}, other).expect(201)
+    await house.give(number).expect(201)
+    expect(await entry(other)).toMatchObject({ amountLeftOut: false, after: { amount: bathAmount } })
+  })
+
   it('nor by whoever signed the order, who has seen what they signed', async () => {
     const number = await aBathToCalculate()
     const signer = await api.as('veterinarian')

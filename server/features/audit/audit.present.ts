@@ -1,10 +1,28 @@
 import type { AuditEntry } from '../../../shared/contracts/audit.contract.ts'
 import type { AuditRow } from './audit.reads.ts'
 
-/** An entry as the reader may see it: clinical content is left out for people who may not read charts. */
-export function presentAuditEntry(row: AuditRow, mayReadClinical: boolean): AuditEntry {
+/** What of an entry its reader is not to see. */
+export interface LeftOut {
+  /** Clinical content: they may not read charts. */
+  clinical: boolean
+  /** The amount of a dose: they may still calculate one of its order blind. */
+  amount: boolean
+}
+
+/** Entries of doses: what was worked out, given, recorded, struck out. */
+export const isOfDose = ({ subject_kind, action }: AuditRow): boolean =>
+  subject_kind === 'order' && action.startsWith('dose.')
+
+function withoutAmount(said: unknown): unknown {
+  if (typeof said !== 'object' || said === null) return said ?? null
+  return Object.fromEntries(Object.entries(said).filter(([name]) => name !== 'amount'))
+}
+
+/** An entry as the reader may see it. */
+export function presentAuditEntry(row: AuditRow, leftOut: LeftOut): AuditEntry {
   const said = JSON.parse(row.text) as { before?: unknown; after?: unknown }
-  const withheld = row.clinical && !mayReadClinical
+  const withheld = row.clinical && leftOut.clinical
+  const shown = leftOut.amount ? withoutAmount : (part: unknown) => part ?? null
   return {
     seq: Number(row.seq),
     at: row.happened_at.toISOString(),
@@ -13,8 +31,9 @@ export function presentAuditEntry(row: AuditRow, mayReadClinical: boolean): Audi
     subjectKind: row.subject_kind,
     subjectLabel: row.subject_label,
     withheld,
-    before: withheld ? null : (said.before ?? null),
-    after: withheld ? null : (said.after ?? null),
+    amountLeftOut: leftOut.amount && !withheld,
+    before: withheld ? null : shown(said.before),
+    after: withheld ? null : shown(said.after),
     hash: row.hash,
   }
 }

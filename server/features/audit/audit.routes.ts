@@ -4,7 +4,8 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
-import { presentAuditEntry } from './audit.present.ts'
+import { isOfDose, presentAuditEntry } from './audit.present.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
 import type { AuditFilter, AuditRow, AuditScope } from './audit.reads.ts'
 
 /** The part of the trail that roles open: all of it, clinical and one's own, or one's own. */
@@ -17,9 +18,13 @@ export function auditScopeOf(personId: string, held: readonly Role[]): AuditScop
   }
 }
 
-export function auditRoutes(
-  read: (scope: AuditScope, filter: AuditFilter) => Promise<{ rows: AuditRow[]; total: number }>,
-): Route[] {
+export interface AuditQuestions {
+  read(scope: AuditScope, filter: AuditFilter): Promise<{ rows: AuditRow[]; total: number }>
+  /** Of some orders, by number, those with a dose to come that somebody may calculate blind. */
+  blindAmong(numbers: readonly string[], actor: Actor): Promise<Set<string>>
+}
+
+export function auditRoutes({ read, blindAmong }: AuditQuestions): Route[] {
   return [
     route(listAudit, async ({ query, context }) => {
       const { personId, roles } = context.actor
@@ -35,9 +40,17 @@ export function auditRoutes(
         limit,
       })
       const mayReadClinical = decide('chart.read', roles, {}).allowed
+      const doses = rows.filter(isOfDose).map((row) => row.subject_label)
+      const blind = await blindAmong([...new Set(doses)], context.actor)
       const last = rows.at(-1)
       return {
-        rows: rows.map((row) => presentAuditEntry(row, mayReadClinical || row.actor_id === personId)),
+        rows: rows.map((row) => {
+          const isOwn = row.actor_id === personId
+          return presentAuditEntry(row, {
+            clinical: !mayReadClinical && !isOwn,
+            amount: !isOwn && isOfDose(row) && blind.has(row.subject_label),
+          })
+        }),
         total,
         nextCursor: last && rows.length === limit && Number(last.seq) > 1 ? last.seq : null,
       }

@@ -1,7 +1,10 @@
 import type { Parts } from '../../platform/parts.ts'
 import { readAudit } from './audit.reads.ts'
 import { auditRoutes } from './audit.routes.ts'
+import type { AuditQuestions } from './audit.routes.ts'
 
-export function createAudit(parts: Parts) {
-  return { routes: auditRoutes((scope, filter) => readAudit(parts.dataSource, scope, filter)) }
+export function createAudit({ dataSource, blindAmong }: Parts & Pick<AuditQuestions, 'blindAmong'>) {
+  return {
+    routes: auditRoutes({ read: (scope, filter) => readAudit(dataSource, scope, filter), blindAmong }),
+  }
 }

@@ -4,6 +4,10 @@ import type { SignedOrder } from './order-content.ts'
 import { blindKeys } from './orders.present.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
+/** Whether somebody's roles let them calculate a second time at all. */
+export const mayBeSecond = (actor: Actor): boolean =>
+  decide('dose.calculate-second', actor.roles, { 'another-person': true }).allowed
+
 /**
  * Whether an order is shown to somebody without its amount: they may be the second person of a dose that is still to
  * come, have not been shown it, and did not sign it.
@@ -11,7 +15,7 @@ import type { OrderReadRow } from './orders.reads.ts'
 export function isBlindTo(row: OrderReadRow, now: string, actor: Actor): boolean {
   const keys = blindKeys(row, now)
   if (keys.length === 0 || row.signers.some((id) => id === actor.personId)) return false
-  if (!decide('dose.calculate-second', actor.roles, { 'another-person': true }).allowed) return false
+  if (!mayBeSecond(actor)) return false
   const known = new Set(
     row.knowers.filter(({ personId }) => personId === actor.personId).map(({ key }) => key),
   )

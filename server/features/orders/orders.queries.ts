@@ -12,13 +12,20 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
-import { isBlindTo, withoutAmount } from './blind-order.ts'
+import { isBlindTo, mayBeSecond, withoutAmount } from './blind-order.ts'
 import { openOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
 import { blindKeys, plannedOf, presentOrderRow, readText, signedContent } from './orders.present.ts'
-import { readEvents, readOrder, readOrders, readRecordedDoses, readVersions } from './orders.reads.ts'
+import {
+  readEvents,
+  readOrder,
+  readOrders,
+  readOrdersNumbered,
+  readRecordedDoses,
+  readVersions,
+} from './orders.reads.ts'
 import type { OrderReadRow, VersionReadRow } from './orders.reads.ts'
 import { missingLinks } from './signing-chain.ts'
 
@@ -157,6 +164,14 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const now = parts.now().toISOString()
       const keys = isBlindTo(row, now, actor) ? blindKeys(row, now) : []
       return { orderId: row.id, versionId: row.version_id, keys }
+    },
+
+    /** Of some orders those whose amount is left out for somebody. */
+    async blindAmong(numbers: readonly string[], actor: Actor): Promise<Set<string>> {
+      if (numbers.length === 0 || !mayBeSecond(actor)) return new Set()
+      const now = parts.now().toISOString()
+      const rows = await readOrdersNumbered(parts.dataSource, numbers)
+      return new Set(rows.filter((row) => isBlindTo(row, now, actor)).map((row) => row.number))
     },
 
     idOf: async (number: string): Promise<string> => (await rowOf(number)).id,

@@ -115,9 +115,12 @@ export function readOrders(db: Db, filter: OrderFilter): Promise<OrderReadRow[]>
 }
 
 export async function readOrder(db: Db, number: string): Promise<OrderReadRow | null> {
-  const [row]: OrderReadRow[] = await db.query(`SELECT ${columns} ${tables} WHERE o.number = $1`, [number])
+  const [row] = await readOrdersNumbered(db, [number])
   return row ?? null
 }
+
+export const readOrdersNumbered = (db: Db, numbers: readonly string[]): Promise<OrderReadRow[]> =>
+  db.query(`SELECT ${columns} ${tables} WHERE o.number = ANY($1)`, [numbers])
 
 /** Orders for a drug in some enclosures with a dose to come: an amount worked out there is theirs as well. */
 export async function readNumbersLike(

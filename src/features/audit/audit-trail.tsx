@@ -20,6 +20,7 @@ function Change({ entry }: { entry: AuditEntry }) {
   return (
     <details>
       <summary>{auditWords.show}</summary>
+      {entry.amountLeftOut ? <p className="t-note">{auditWords.amountLeftOut}</p> : null}
       {(['before', 'after'] as const).map((side) =>
         entry[side] === null || entry[side] === undefined ? null : (
           <div key={side}>
