@@ -2,6 +2,7 @@ import type pg from 'pg'
 import { DataSource } from 'typeorm'
 import type { EntitySchema } from 'typeorm'
 import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
+import { PreparingClient } from './preparing-client.ts'
 import { WrittenRows } from './written-rows.ts'
 
 export type EntityClass = (new () => object) | EntitySchema
@@ -20,8 +21,12 @@ export async function connectRuntime(
     synchronize: false,
     installExtensions: false,
     poolSize,
-    // Many short queries: compiling one of them takes longer than running it
-    extra: { options: '-c timezone=UTC -c jit=off' },
+    // Many short queries over many views: to compile or to plan one takes longer than running it. So none is compiled,
+    // and each is planned once, for any parameters (preparing-client.ts)
+    extra: {
+      options: '-c timezone=UTC -c jit=off -c plan_cache_mode=force_generic_plan',
+      Client: PreparingClient,
+    },
   })
   await dataSource.initialize()
   const [role]: Record<string, boolean>[] = await dataSource.query(
