@@ -93,7 +93,11 @@ export default defineConfig({
           hookTimeout: 60_000,
         },
       },
-      { extends: true, test: { name: 'client', environment: 'happy-dom', include: files('client') } },
+      // they leave no document behind (`tests/support/react.tsx`): React need not be loaded anew for each file
+      {
+        extends: true,
+        test: { name: 'client', environment: 'happy-dom', isolate: false, include: files('client') },
+      },
       {
         extends: true,
         test: {

@@ -34,7 +34,7 @@ async function runAll(vitestArgs) {
   const say = (line) => console.log(`  ${line}`)
   if (!(await provide('dependencies', () => ensureDependencies(projectRoot, { say, signal: stop })))) return
   await inTurn(2, [
-    () => check('types', ['typescript/bin/tsc', '-b']),
+    () => check('types', ['typescript-native/bin/tsc', '-b']),
     () => check('lint', ['eslint/bin/eslint.js', '--max-warnings', '0', ...folders]),
     () => check('format', ['prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', ...folders]),
     () => verdict('lock file', lockNamesNoHost(readFileSync('package-lock.json', 'utf8')), 'it names a host'),

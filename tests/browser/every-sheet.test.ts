@@ -4,10 +4,10 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { addressOf, everySheet } from '../../server/cli/every-sheet.mjs'
 import { findUnsafeWriting } from '../../shared/domain/quantities/find-unsafe-writing.ts'
 import type { Writing } from '../../shared/domain/quantities/find-unsafe-writing.ts'
-import { password } from '../support/api.ts'
 import { expectAccessible } from '../support/axe.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
 import { routesOfTheClient } from '../support/client-routes.ts'
+import { enter } from '../support/journey.ts'
 import { buildWithParts } from '../support/parts-build.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
@@ -25,12 +25,6 @@ afterAll(async () => {
   await app.stop()
   await rm(pagesFolder, { recursive: true, force: true })
 })
-
-async function signIn(page: Page, name: string): Promise<void> {
-  const email = `${name}@harrow-point.example`
-  const reply = await page.request.post(`${app.url}/api/sign-in`, { data: { email, password } })
-  expect(reply.status(), `sign-in of ${email}`).toBe(200)
-}
 
 /** Everything that a person reads on the page, each quantity as what it is marked, and the whole as prose. */
 async function unsafeWritingOn(page: Page): Promise<string[]> {
@@ -133,7 +127,7 @@ describe('every sheet with the practice data, in the hand and at the desk', () =
     'of %s has no fault, nothing unsafe to read, nothing wider than the window',
     async (name) => {
       const { page } = await newSession(browser, { ...hand, expectedErrors })
-      await signIn(page, name)
+      await enter(page, app, name)
       const open = opener(page)
       for (const sheet of everySheet.filter((each) => each.as === name)) {
         await page.setViewportSize(hand)
@@ -159,7 +153,7 @@ describe('every sheet in longer words, and from right to left', () => {
     async (name) => {
       const { page, context } = await newSession(browser, { ...hand, expectedErrors })
       await context.addInitScript(() => localStorage.setItem('pratique.words', 'pseudo'))
-      await signIn(page, name)
+      await enter(page, app, name)
       const open = opener(page)
       for (const sheet of everySheet.filter((each) => each.as === name)) {
         if ((await open(sheet)) === null) continue
