@@ -1,5 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aCase, aFish } from '../builders/a-case.ts'
+import type { BuiltCase } from '../builders/a-case.ts'
+import { aGroup } from '../builders/a-collection.ts'
 import { anEnclosure } from '../builders/a-water.ts'
 import { anObservation } from '../builders/an-observation.ts'
 import { newKey, password, startApi } from '../support/api.ts'
@@ -111,5 +113,124 @@ describe('bodies without a name where two cases live', () => {
       [unextended, [null]],
       [extended, [null]],
     ])
+  })
+
+  /** A group that lives in a tank of its own, in no case. */
+  const aStranger = async (code: string) => {
+    const enclosure = await anEnclosure(api, code, { boundary: 'Wing' })
+    const at = '2026-11-10T14:00:00Z'
+    const group = { taxonId: await aFish(api), enclosureId: enclosure.id, count: 4, happenedAt: at }
+    return aGroup(api, group)
+  }
+  const explain = async (accession: string, outcome: 'explained' | 'seen-wrongly') => {
+    const { agent } = await api.as('registrar')
+    const chart = await agent.get(`/api/animals/${accession}`).expect(200)
+    const [open] = chart.body.discrepancies as { id: string; kind: string }[]
+    expect(open?.kind).toBe('died-elsewhere')
+    await agent
+      .post(`/api/discrepancies/${String(open?.id)}/resolution`)
+      .set('Idempotency-Key', newKey())
+      .send({ outcome, reason: 'It had jumped over the wall' })
+      .expect(200)
+  }
+  const waits = [
+    [extended, [null]],
+    [extended, [null]],
+  ]
+
+  it('are waited for, though named as an animal from elsewhere, until somebody explained how it came there', async () => {
+    const { id, standing } = await bodiesInOneTank('OB-ELSE', 1)
+    const { accession } = await aStranger('OB-ELSE-2')
+    expect((await name(id, { deaths: [{ id: api.nextId(), accession, count: 1 }] })).status).toBe(201)
+    expect(await standing()).toEqual(waits)
+    await explain(accession, 'explained')
+    expect(await standing()).toEqual([
+      [unextended, []],
+      [unextended, []],
+    ])
+  })
+
+  it('go on being waited for where it turns out that they were not that animal', async () => {
+    const { id, standing } = await bodiesInOneTank('OB-NOT', 1)
+    const { accession } = await aStranger('OB-NOT-2')
+    expect((await name(id, { deaths: [{ id: api.nextId(), accession, count: 1 }] })).status).toBe(201)
+    await explain(accession, 'seen-wrongly')
+    expect(await standing()).toEqual(waits)
+  })
+
+  it('named as an animal from elsewhere at once are waited for in the same way', async () => {
+    const one = await aCase(api)
+    const { accession } = await aStranger('OB-ONCE')
+    const deaths = [{ id: api.nextId(), accession, count: 1 }]
+    const { agent } = await api.as('keeper')
+    await agent
+      .post('/api/observations')
+      .send(anObservation(api, one.enclosure.code, { foundDead: 1, deaths }))
+      .expect(201)
+    expect((await agent.get(one.url)).body.earliestClearanceOn).toBe(extended)
+    await explain(accession, 'explained')
+    expect((await agent.get(one.url)).body.earliestClearanceOn).toBe(unextended)
+  })
+})
+
+describe('bodies found where a batch is no longer, or is not known of yet', () => {
+  const seeDead = async (code: string, happenedAt = '2026-12-01T18:00:00Z') => {
+    const { agent } = await api.as('keeper')
+    const seen = await agent
+      .post('/api/observations')
+      .send(anObservation(api, code, { foundDead: 1, happenedAt }))
+    expect(seen.status).toBe(201)
+    return seen.body as { id: string; unassignedDead: number; cases: string[] }
+  }
+  const clearanceOf = async (url: string) =>
+    (await (await api.as('technician')).agent.get(url).expect(200)).body.earliestClearanceOn as string
+  const moveOut = async (one: BuiltCase, happenedAt: string) => {
+    const to = await anEnclosure(api, `${one.enclosure.code}-B`, { boundary: 'Wing' })
+    const { agent } = await api.as('technician')
+    await agent
+      .post(`/api/animals/${one.animal.accession}/moves`)
+      .send({ id: api.nextId(), fromEnclosureId: one.enclosure.id, toEnclosureId: to.id, happenedAt })
+      .expect(201)
+  }
+
+  it.each([
+    ['minutes', '2026-12-01T17:50:00Z', '2026-12-15'],
+    ['almost a day', '2026-11-30T18:30:00Z', '2026-12-15'],
+    ['more than a day', '2026-11-30T17:30:00Z', '2026-12-10'],
+  ])('after it left %s before are waited for if it was there within a day', async (_, leftAt, clearance) => {
+    const one = await aCase(api)
+    await moveOut(one, leftAt)
+    await seeDead(one.enclosure.code)
+    expect(await clearanceOf(one.url)).toBe(clearance)
+  })
+
+  it('are not given to the only group there while another batch has just left', async () => {
+    const left = await aCase(api)
+    const stays = await aCase(api, { enclosure: left.enclosure, taxonId: left.taxonId })
+    await moveOut(left, '2026-12-01T17:50:00Z')
+    expect((await seeDead(left.enclosure.code)).unassignedDead).toBe(1)
+    expect([await clearanceOf(left.url), await clearanceOf(stays.url)]).toEqual(['2026-12-15', '2026-12-15'])
+  })
+
+  it('before its case was entered are waited for by it too', async () => {
+    const at = '2026-11-10T14:00:00Z'
+    const enclosure = await anEnclosure(api, 'OB-LATER', { boundary: 'Wing' })
+    const taxonId = await aFish(api)
+    // a second group, so that nobody can say whose the body is
+    await aGroup(api, { taxonId, enclosureId: enclosure.id, count: 3, happenedAt: at })
+    // and the first of the case, entered after the body
+    const first = await aCase(api, { enclosure, taxonId, at })
+    const seen = await seeDead(enclosure.code)
+    expect([seen.unassignedDead, seen.cases]).toEqual([1, [first.number]])
+    const late = await aCase(api, { enclosure, taxonId, at })
+    expect([await clearanceOf(first.url), await clearanceOf(late.url)]).toEqual(['2026-12-15', '2026-12-15'])
+    const strike = await (
+      await api.as('keeper')
+    ).agent
+      .post(`/api/observations/${seen.id}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'Looked into the wrong tank' })
+    expect(strike.status).toBe(200)
+    expect([await clearanceOf(first.url), await clearanceOf(late.url)]).toEqual(['2026-12-10', '2026-12-10'])
   })
 })

@@ -55,12 +55,12 @@ export function createBodiesService(
         if (row.unassignedDead === 0) throw new Problem('already-explained')
         if (await repository.isVoided(tx, observationId)) throw new Problem('already-void')
         if (!(await repository.insertBodies(tx, bodies)).created) return
+        const { happenedAt, happenedOn } = row
+        const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
         // In the cases they stood as deaths of nobody; now each is a death of its animal, in its own case only, and what
         // is left stays where it was
         if (named > 0) {
           await unnamed.withdraw(tx, heads, { observationId, reason: observationDetails.bodiesNamed })
-          const { happenedAt, happenedOn } = row
-          const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
           await unnamed.enter(tx, heads, { count: row.unassignedDead - named, observationId }, times)
         }
         for (const [i, death] of given.deaths.entries()) {
@@ -81,6 +81,7 @@ export function createBodiesService(
           }
           await repository.linkDeath(tx, observationId, death.id)
         }
+        await unnamed.enterNamedElsewhere(tx, heads, given.deaths, { observationId }, times)
         tx.audit({
           action: 'observation.name-bodies',
           subject: { kind: 'observation', id: observationId, label: observationId },

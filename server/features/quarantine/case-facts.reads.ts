@@ -62,13 +62,23 @@ export interface CaseEventReadRow {
   voided_reason: string | null
 }
 
-/** Events of cases as entered, voided ones with the reason. */
+/**
+ * Events of cases as entered, voided ones with the reason. A body that was named as an animal from elsewhere stands until
+ * somebody explained that; where they say that it was not that animal, it goes on standing.
+ */
 export function readCaseEvents(db: Db, caseIds: readonly string[]): Promise<CaseEventReadRow[]> {
   return db.query(
     `SELECT e.id, e.case_id, e.kind, e.facts, e.reason, e.observation_id, e.signed_text_id, e.happened_at,
             e.happened_on::text AS happened_on, e.recorded_at, w.printed_name AS recorded_by_name,
-            (SELECT v.reason FROM case_events v
-              WHERE v.kind = 'voided' AND v.facts ->> 'voidsEventId' = e.id::text) AS voided_reason
+            coalesce((SELECT v.reason FROM case_events v
+                       WHERE v.kind = 'voided' AND v.facts ->> 'voidsEventId' = e.id::text),
+                     CASE WHEN e.facts ->> 'diedElsewhereId' IS NOT NULL THEN
+                       (SELECT x.reason FROM discrepancies d
+                          JOIN discrepancy_resolutions x ON x.discrepancy_id = d.id
+                         WHERE d.kind = 'died-elsewhere' AND d.source_kind = 'death'
+                           AND d.source_id = (e.facts ->> 'diedElsewhereId')::uuid
+                           AND x.outcome <> 'seen-wrongly')
+                     END) AS voided_reason
        FROM case_events e
        LEFT JOIN people w ON w.id = e.recorded_by
       WHERE e.case_id = ANY ($1::uuid[])

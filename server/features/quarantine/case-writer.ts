@@ -128,7 +128,7 @@ export function createCaseWriter(parts: CaseWriterParts) {
     /** Writes one event; nothing when it was written before. */
     async write(
       tx: Tx,
-      head: CaseReadRow,
+      head: Pick<CaseReadRow, 'id' | 'number'>,
       given: EventGiven,
       times: FactTimes,
     ): Promise<{ created: boolean }> {

@@ -12,6 +12,7 @@ import type { CaseWriter, CaseWriterParts } from './case-writer.ts'
 import type { CaseRow } from './case.entity.ts'
 import * as repository from './cases.repository.ts'
 import { findProtocolVersion } from './protocols.repository.ts'
+import type { UnnamedBodies } from './unnamed-bodies.ts'
 
 type OpenGiven = BodyOf<typeof contracts.openCase>
 type MemberGiven = OpenGiven['members'][number]
@@ -23,7 +24,7 @@ interface Joining extends MemberGiven {
 
 /** Opening a case, letting animals join its batch, and closing it. */
 export function createCasesService(
-  parts: CaseWriterParts & { transactions: Transactions; writer: CaseWriter },
+  parts: CaseWriterParts & { transactions: Transactions; writer: CaseWriter; unnamed: UnnamedBodies },
 ) {
   const { animals, facility, writer } = parts
 
@@ -127,6 +128,7 @@ export function createCasesService(
               members: batch.map(({ accession }) => accession),
             },
           })
+        await parts.unnamed.catchUp(tx, head)
         await writer.settle(tx, head.id)
       })
     },
@@ -142,6 +144,7 @@ export function createCasesService(
           await checkMayJoin(tx, one, head.quarantine_kind, head.id, '/accession')
         }
         await join(tx, head, one, '/happenedAt')
+        await parts.unnamed.catchUp(tx, head)
         await writer.settle(tx, head.id)
       })
     },

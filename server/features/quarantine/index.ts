@@ -76,12 +76,12 @@ export function createQuarantine(
 ) {
   const parts = { ...given, people: given.people.questions, water: given.water.questions }
   const writer = createCaseWriter(parts)
-  const cases = createCasesService({ ...parts, writer })
+  const unnamed = createUnnamedBodies({ ...parts, writer })
+  const cases = createCasesService({ ...parts, writer, unnamed })
   const events = createCaseEventsService({ ...parts, writer })
   const treatments = createTreatmentsService({ ...parts, events })
   const protocols = createProtocolsService(parts)
   const notices = createNoticesService(parts)
-  const unnamed = createUnnamedBodies({ ...parts, writer })
   const observations = createObservationsService({ ...parts, writer, notices, unnamed })
   const bodies = createBodiesService({ ...parts, writer, unnamed })
   const queries = createQuarantineQueries(parts)

@@ -65,6 +65,43 @@ export function insertBodies(tx: Tx, row: ObservationBodiesRow): Promise<{ creat
   return insertOnce(tx, ObservationBodiesRow, row, ['observationId', 'namedCount', 'reason'])
 }
 
+export interface OpenBodiesRow {
+  id: string
+  enclosure_id: string
+  happened_at: Date
+  happened_on: string
+  left_count: number
+}
+
+/** Bodies without a name that were found in these enclosures and never stood in this case. */
+export function findOpenBodies(
+  tx: Tx,
+  caseId: string,
+  enclosureIds: readonly string[],
+): Promise<OpenBodiesRow[]> {
+  return tx.manager.query(
+    `SELECT o.id, o.enclosure_id, o.happened_at, o.happened_on::text AS happened_on,
+            o.unassigned_dead - coalesce(b.named_count, 0) AS left_count
+       FROM observations o LEFT JOIN observation_bodies b ON b.observation_id = o.id
+      WHERE o.enclosure_id = ANY ($2::uuid[]) AND o.unassigned_dead > coalesce(b.named_count, 0)
+        AND NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)
+        AND NOT EXISTS (SELECT 1 FROM case_events e
+                         WHERE e.case_id = $1 AND e.observation_id = o.id AND e.kind = 'death')
+      ORDER BY o.happened_at, o.id`,
+    [caseId, enclosureIds],
+  )
+}
+
+/** Of these deaths, those of animals that were elsewhere by their moves. */
+export async function findDiedElsewhere(tx: Tx, deathIds: readonly string[]): Promise<Set<string>> {
+  const rows: { source_id: string }[] = await tx.manager.query(
+    `SELECT d.source_id FROM discrepancies d
+      WHERE d.kind = 'died-elsewhere' AND d.source_kind = 'death' AND d.source_id = ANY ($1::uuid[])`,
+    [deathIds],
+  )
+  return new Set(rows.map(({ source_id }) => source_id))
+}
+
 export interface BodiesEventRow {
   id: string
   case_id: string

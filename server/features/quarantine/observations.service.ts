@@ -97,7 +97,13 @@ export function createObservationsService(
         if (!enclosure) throw refusedInput('/enclosure', observationDetails.noSuchEnclosure, 'not-found')
         const times = await writer.timesOf(tx, given)
         const here = await animals.questions.animalsIn([enclosure.id], times.happenedAt, tx.manager)
-        const deaths = deathsOf(given, here)
+        const heads = await casesThere(tx, here, times.happenedAt)
+        // A look changes no clock unless bodies are found: only then it matters whose they may be
+        const mayBeOf = given.foundDead
+          ? await parts.unnamed.casesFor(tx, enclosure.id, times.happenedAt)
+          : []
+        const leftBefore = mayBeOf.filter(({ id }) => heads.every((head) => head.id !== id))
+        const deaths = leftBefore.length > 0 ? given.deaths : deathsOf(given, here)
         const named = deaths.reduce((sum, { count }) => sum + count, 0)
         const { count } = given
         const row: ObservationRow = {
@@ -125,14 +131,12 @@ export function createObservationsService(
         }
         if (await repository.isObservationRepeated(tx, row)) return
 
-        const heads = await casesThere(tx, here, times.happenedAt)
         const [first] = heads
-        // A look changes no clock unless bodies are found: only then the cases and their animals are locked
         const locked =
           (given.foundDead ?? 0) > 0
             ? await writer.lockAll(
                 tx,
-                heads.map(({ id }) => id),
+                [...heads, ...leftBefore].map(({ id }) => id),
                 here.map(({ animalId }) => animalId),
               )
             : []
@@ -155,6 +159,7 @@ export function createObservationsService(
         const { origin, device } = given
         const unnamed = { count: row.unassignedDead, observationId: given.id, origin, device }
         await parts.unnamed.enter(tx, locked, unnamed, stampsOf(times))
+        await parts.unnamed.enterNamedElsewhere(tx, locked, deaths, unnamed, stampsOf(times))
         const words = sayObservation(given).join('. ')
         tx.audit({
           action: 'observation.record',
@@ -165,7 +170,7 @@ export function createObservationsService(
             happenedAt: at,
             forVeterinarian: given.forVeterinarian,
             urgent: given.urgent,
-            cases: heads.map(({ number }) => number),
+            cases: [...heads, ...leftBefore].map(({ number }) => number),
           },
           clinical: true,
         })

@@ -150,11 +150,16 @@ async function readComponent(parts: ClockParts, db: Db, wanted: WantedCases, asO
   }
 }
 
-/** The cases with an animal of theirs in one of these enclosures at an instant, parts of groups included. */
+/**
+ * The cases with an animal of theirs in one of these enclosures at an instant, parts of groups included.
+ *
+ * @param since those too whose animals left only after this, while their case still runs
+ */
 export async function findCasesIn(
   db: Db,
   enclosureIds: readonly string[],
   at: Date,
+  since = at,
 ): Promise<{ id: string; number: string }[]> {
   const cases = await reads.readCases(db)
   const batches = withParts(await reads.readMembers(db), await reads.readSplits(db))
@@ -163,10 +168,21 @@ export async function findCasesIn(
     (stay) =>
       enclosureIds.includes(stay.enclosure_id) &&
       stay.from_at <= at &&
-      (stay.until_at === null || stay.until_at > at),
+      (stay.until_at === null || stay.until_at > since),
   )
   const ids = new Set(there.map((stay) => stay.case_id))
-  return cases.filter(({ id }) => ids.has(id)).map(({ id, number }) => ({ id, number }))
+  return cases
+    .filter(({ id, ended_at }) => ids.has(id) && (ended_at === null || ended_at > at))
+    .map(({ id, number }) => ({ id, number }))
+}
+
+/** Where the batch of a case was, and until when, while the case ran. */
+export async function readStaysOfCase(db: Db, caseId: string): Promise<reads.BatchStayReadRow[]> {
+  const batches = withParts(await reads.readMembers(db), await reads.readSplits(db)).filter(
+    (row) => row.case_id === caseId,
+  )
+  const animalIds = batches.map((row) => row.animal_id)
+  return clip(await reads.readCases(db, [caseId]), batches, await reads.readStaysOf(db, animalIds))
 }
 
 /** Ids of the cases that share water with these, themselves among them, and of all their animals: what a write locks. */

@@ -2,39 +2,100 @@ import { observationDetails } from '../../../shared/messages/quarantine-refusals
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Ids } from '../../platform/ids.ts'
+import type { Animals } from '../animals/index.ts'
 import type { FactTimes } from '../facility/index.ts'
 import type { CaseReadRow } from './case-facts.reads.ts'
 import type { CaseWriter } from './case-writer.ts'
-import { findBodiesEvents } from './observations.repository.ts'
+import { findCaseOf } from './cases.repository.ts'
+import { findBodiesEvents, findDiedElsewhere, findOpenBodies } from './observations.repository.ts'
+import { findCasesIn, readStaysOfCase } from './read-clocks.ts'
+
+/**
+ * A body may have lain there for a day before anybody saw it: tanks in quarantine are looked into once a day at least. A
+ * batch that left within that time may have left it behind.
+ */
+const unseenForMs = 24 * 3600_000
+const sinceWhen = (at: Date) => new Date(at.getTime() - unseenForMs)
+
+interface Bodies {
+  count: number
+  observationId: string
+  origin?: 'online' | 'outbox' | undefined
+  device?: string | null | undefined
+  diedElsewhereId?: string
+}
 
 /**
  * Bodies that nobody could name, in the clocks of cases. Until they are named they may have been of any batch that lived
  * there, so every one of these cases waits for them.
  */
-export function createUnnamedBodies(parts: { ids: Ids; writer: CaseWriter }) {
+export function createUnnamedBodies(parts: { ids: Ids; animals: Animals; writer: CaseWriter }) {
   const { ids, writer } = parts
+
+  /** Enters them in each of these locked cases. */
+  async function enter(
+    tx: Tx,
+    heads: readonly Pick<CaseReadRow, 'id' | 'number'>[],
+    given: Bodies,
+    times: FactTimes,
+  ): Promise<void> {
+    const { count, observationId, origin = 'online', device = null, diedElsewhereId } = given
+    if (count === 0) return
+    const named = diedElsewhereId === undefined ? {} : { diedElsewhereId }
+    const facts = { kind: 'death' as const, deathCount: count, ...named }
+    for (const head of heads)
+      await writer.write(tx, head, { id: ids.next(), facts, observationId, origin, device }, times)
+  }
+
   return {
-    /** Enters them in each of these locked cases. */
-    async enter(
+    enter,
+
+    /** The running cases that a body found there and then may be of: their batch was there, or had just left. */
+    casesFor: (tx: Tx, enclosureId: string, at: Date) =>
+      findCasesIn(tx.manager, [enclosureId], at, sinceWhen(at)),
+
+    /**
+     * Bodies that were named as an animal that was elsewhere: as long as nobody explained how it came there they may as
+     * well be of the batches that lived there, and these go on waiting.
+     *
+     * @param heads the locked cases that the bodies may be of
+     */
+    async enterNamedElsewhere(
       tx: Tx,
       heads: readonly CaseReadRow[],
-      given: {
-        count: number
-        observationId: string
-        origin?: 'online' | 'outbox' | undefined
-        device?: string | null | undefined
-      },
+      deaths: readonly { id: string; accession: string; count: number }[],
+      given: Omit<Bodies, 'count' | 'diedElsewhereId'>,
       times: FactTimes,
     ): Promise<void> {
-      const { count, observationId, origin = 'online', device = null } = given
-      if (count === 0) return
-      for (const head of heads)
-        await writer.write(
-          tx,
-          head,
-          { id: ids.next(), facts: { kind: 'death', deathCount: count }, observationId, origin, device },
-          times,
+      if (heads.length === 0) return
+      const elsewhere = await findDiedElsewhere(
+        tx,
+        deaths.map(({ id }) => id),
+      )
+      for (const { id, accession, count } of deaths.filter((death) => elsewhere.has(death.id))) {
+        const animal = await parts.animals.questions.animalByAccession(
+          accession,
+          times.happenedAt,
+          tx.manager,
         )
+        // in the case of that animal its death stands already
+        const own = animal && (await findCaseOf(tx, animal.animalId, times.happenedAt))
+        const others = heads.filter((head) => head.id !== own?.id)
+        await enter(tx, others, { ...given, count, diedElsewhereId: id }, times)
+      }
+    },
+
+    /** What was found where a batch lived before its case, or its joining, was entered: the clock waits for it too. */
+    async catchUp(tx: Tx, head: Pick<CaseReadRow, 'id' | 'number'>): Promise<void> {
+      const stays = await readStaysOfCase(tx.manager, head.id)
+      const places = [...new Set(stays.map((stay) => stay.enclosure_id))]
+      for (const row of await findOpenBodies(tx, head.id, places)) {
+        const { happened_at: happenedAt, happened_on: happenedOn } = row
+        const cases = await findCasesIn(tx.manager, [row.enclosure_id], happenedAt, sinceWhen(happenedAt))
+        if (!cases.some(({ id }) => id === head.id)) continue
+        const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
+        await enter(tx, [head], { count: row.left_count, observationId: row.id }, times)
+      }
     },
 
     /** Locks the cases in which the bodies of an observation stand now. */
