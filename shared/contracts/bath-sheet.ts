@@ -190,6 +190,7 @@ export const BathSheet = z.object({
   second: Calculation.extend({
     agrees: z.boolean().describe('Agrees with the first'),
     alone: z.boolean().describe('Made by the same person as the first: nobody else could be reached'),
+    aloneText: z.string().nullable().describe('By whom, and how long after the first; null unless it agrees'),
     differs: z
       .array(z.enum(['enclosure', 'mark', 'lot', 'strength', 'amount']))
       .describe('What does not agree with the first calculation, the order or the label'),

@@ -34,8 +34,10 @@ export const doseWords = defineMessages({
   repeatEarly: (p: { from: string }) =>
     `You made the first calculation. Ask another person. Where nobody can be reached you may repeat it yourself from ${p.from}.`,
   calculatedAlone: 'No second person calculated the amount',
-  calculatedAloneText: (p: { by: string }) =>
-    `Nobody else could be reached. ${p.by} worked it out, and again some minutes later from label, mark and container. A veterinarian reviews it.`,
+  calculatedAloneBy: (p: { by: string; minutes: number }) =>
+    `Calculated alone by ${p.by}, repeated after ${String(p.minutes)} min.`,
+  calculatedAloneText: (p: { calculated: string }) =>
+    `${p.calculated} Nobody else could be reached. It was worked out again from label, mark and container. A veterinarian reviews it.`,
   amountLeftOut: 'The amounts are left out here: you may still calculate a dose of this order blind.',
   amountSeen:
     'You have been shown the amount of this dose or signed the order, so your calculation would not be blind. Ask somebody who has not seen it.',

@@ -111,6 +111,8 @@ export const orderPaper = defineMessages({
   shares: 'shares the water',
   noAnimals: 'Nobody is in this water.',
   givenHeading: 'Given',
+  alone: (p: { key: string; calculated: string }) =>
+    `Dose ${p.key}: no second person calculated the amount. ${p.calculated}`,
   dose: 'Dose',
   due: 'Due',
   second: 'Second calculation',

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
+import { textOf } from '../pdf/support/poppler.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 
@@ -20,6 +21,18 @@ const aBathToCalculate = async () => {
   await house.freshWater(bath)
   await house.calculateFirst(number).expect(201)
   return number
+}
+async function pdfText(by: TestPerson, path: string): Promise<string> {
+  const reply = await by.agent
+    .get(path)
+    .buffer(true)
+    .parse((res, done) => {
+      const chunks: Buffer[] = []
+      res.on('data', (chunk: Buffer) => chunks.push(chunk))
+      res.on('end', () => done(null, Buffer.concat(chunks)))
+    })
+    .expect(200)
+  return textOf(reply.body as Uint8Array).replaceAll(/\s+/g, ' ')
 }
 const blindSheet = async (number: string, by: TestPerson) =>
   (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
@@ -288,14 +301,40 @@ describe('a second calculation is blind', () => {
     after(5)
     expect((await house.calculateSecond(bath, number, { nobodyReached: true }, keeper)).status).toBe(403)
     const done = await repeat({ nobodyReached: true }).expect(201)
-    expect(done.body.second).toMatchObject({ agrees: true, alone: true })
+    const calculated = 'Calculated alone by Test technician, repeated after 5 min.'
+    expect(done.body.second).toMatchObject({ agrees: true, alone: true, aloneText: calculated })
+    const paper = await pdfText(house.technician, house.doseAt(number, '/print'))
+    expect(paper).toContain(calculated)
     const given = await house.give(number).expect(201)
     expect(given.body.recorded[0].exceptions).toMatchObject([
-      { ruleId: 'R39', code: 'calculated-alone', level: 'warning' },
+      {
+        ruleId: 'R39',
+        code: 'calculated-alone',
+        level: 'warning',
+        text: expect.stringContaining(calculated),
+      },
     ])
+    const order = await pdfText(house.technician, `/api/orders/${number}/print`)
+    expect(order).toContain(`Dose 1: no second person calculated the amount. ${calculated}`)
     const veterinarian = await api.as('veterinarian')
     const today = (await veterinarian.agent.get('/api/today').expect(200)).body
     expect(JSON.stringify(today)).toContain(`dose-exceptions:${given.body.recorded[0].id}`)
+  })
+
+  it('and says so as well of a dose that was recorded afterwards; not of one that went in before', async () => {
+    const codes = async (happenedAfterMinutes: number) => {
+      api.clock.set(testDay)
+      const number = await aBathToCalculate()
+      const at = (minutes: number) => new Date(testDay.getTime() + minutes * 60_000)
+      api.clock.set(at(5))
+      await house.calculateSecond(bath, number, { nobodyReached: true }, house.technician).expect(201)
+      api.clock.set(at(10))
+      const happenedAt = at(happenedAfterMinutes).toISOString()
+      const [record] = (await house.record(number, { happenedAt }).expect(201)).body.recorded
+      return record.exceptions.map(({ code }: { code: string }) => code)
+    }
+    expect(await codes(6)).toContain('calculated-alone')
+    expect(await codes(4)).not.toContain('calculated-alone')
   })
 
   it('where a repeat by the same person disagrees, it begins again as well', async () => {

@@ -32,7 +32,7 @@ import { amountEntered } from './entered-amounts.ts'
 import { readLotNamed, refuseOtherLot } from './lot-of-order.ts'
 import type { LotNamed } from './lot-of-order.ts'
 import { isAmountNow, needsSecond, obstacles } from './judge-dose.ts'
-import { firstOf, secondOf, secondStands } from './second-person.ts'
+import { calculationsBy, firstOf, secondOf, secondStands } from './second-person.ts'
 import { concentrationGiven, exceptionsOf, judgeAmount, marksOfCalculations, textOf } from './judge-record.ts'
 import type { Exception } from './judge-record.ts'
 
@@ -219,6 +219,12 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           lotId: given.lotId,
         })
         refuseLongBefore(situation, happenedAt)
+        const calculations = calculationsBy(
+          await parts.calculations(situation.versionId, key, tx),
+          happenedAt,
+        )
+        const rested =
+          wentIn(given) && secondStands(calculations) && firstOf(calculations)?.lot_id === given.lotId
         await writeDose(tx, situation, {
           id: given.id,
           kind: given.kind,
@@ -226,8 +232,8 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           amount,
           lotId: given.lotId,
           note: given.note ?? null,
-          secondCalculationId: null,
-          marks: [],
+          secondCalculationId: rested ? (secondOf(calculations)?.id ?? null) : null,
+          marks: rested ? marksOfCalculations(calculations) : [],
         })
       })
     },

@@ -5,6 +5,7 @@ import { formatFingerprint } from '../../../shared/domain/documents/format-finge
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { bathPaper } from '../../../shared/messages/bath-paper.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
@@ -138,6 +139,14 @@ function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
   }
 }
 
+/** No second person calculated it: whoever doses from the page is told. */
+const aloneBlock = ({ sheet }: BathPaper): DocumentBlock[] => {
+  const alone = sheet.second?.aloneText ?? null
+  return alone === null
+    ? []
+    : [{ kind: 'caution', level: 'warning', title: doseWords.calculatedAlone, lines: [alone] }]
+}
+
 function duringBlock(): DocumentBlock {
   const pen = { pen: true } as const
   const row = [pen, { pen: true, unit: 'mg/L' } as const, { pen: true, unit: '°C' } as const, pen]
@@ -194,6 +203,7 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       },
       { kind: 'rule' },
       { kind: 'caution', level: 'stop-if', lines: [sheet.stopIf] },
+      ...aloneBlock(paper),
       ...listed(
         bathPaper.inTheWay,
         sheet.why.map((text) => ({ kind: 'paragraph', text: [{ text, bold: true }] })),

@@ -9,7 +9,7 @@ import type { DoseSituation } from './dose-situation.ts'
 import { divisionOf } from './judge-dose.ts'
 import type { LotNamed } from './lot-of-order.ts'
 import { saidForSheet } from './present-sheet.ts'
-import { secondOf, wasRepeatedAlone } from './second-person.ts'
+import { aloneOf } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 
 export interface Exception {
@@ -81,14 +81,15 @@ function sayTimes(times: number | null): string {
 
 /** What the veterinarian is to see of the calculations of a dose that was given under the conditions. */
 export function marksOfCalculations(calculations: Calculations): Exception[] {
-  if (!wasRepeatedAlone(calculations)) return []
+  const alone = aloneOf(calculations)
+  if (!alone) return []
   return [
     {
       ruleId: 'R39',
       code: 'calculated-alone',
       level: 'warning',
       title: doseWords.calculatedAlone,
-      text: doseWords.calculatedAloneText({ by: secondOf(calculations)?.by_name ?? '' }),
+      text: doseWords.calculatedAloneText({ calculated: doseWords.calculatedAloneBy(alone) }),
       resolve: [],
     },
   ]

@@ -21,7 +21,7 @@ import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
 import { presentRecord, storedText } from './present-record.ts'
-import { firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
+import { aloneOf, firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 import { findingOf } from './signed-overrides.ts'
 
@@ -55,12 +55,14 @@ function presentFirst(row: CalculationReadRow | undefined, hide: boolean, actor:
 
 function presentSecond(
   situation: DoseSituation,
-  first: CalculationReadRow | undefined,
-  second: CalculationReadRow | undefined,
+  calculations: Calculations,
   hide: boolean,
   actor: Actor,
 ): BathSheet['second'] {
+  const first = firstOf(calculations)
+  const second = secondOf(calculations)
   if (!second) return null
+  const alone = aloneOf(calculations)
   const mine = isMine(second, actor)
   return {
     by: second.by_name,
@@ -70,6 +72,7 @@ function presentSecond(
     mine,
     agrees: second.agrees ?? false,
     alone: isByTheSame(first, second),
+    aloneText: alone && doseWords.calculatedAloneBy(alone),
     differs: first && second.agrees === false ? differsOf(situation, first, second) : [],
     markCompared: situation.marks.depths.length > 0 || situation.marks.fillMark !== null,
     differencePercent: hide ? null : second.difference_percent,
@@ -265,7 +268,6 @@ export function presentSheet(request: SheetRequest): BathSheet {
   const zone = judgement?.facts.zone ?? 'UTC'
   const dose = judgement?.dose ?? null
   const first = firstOf(calculations)
-  const second = secondOf(calculations)
   const own = records.filter((record) => record.dose_key === planned.key)
   const isOpen = own.length === 0
   const hide = blind && (isOpen ? !secondStands(calculations) : request.mayBeSecondElsewhere)
@@ -322,7 +324,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
     first: presentFirst(first, hide, actor),
-    second: presentSecond(situation, first, second, hide, actor),
+    second: presentSecond(situation, calculations, hide, actor),
     secondShut: secondShut(calculations, actor),
     repeatAt: repeatFrom(calculations, actor)?.toISOString() ?? null,
     mayStart: why.length === 0,

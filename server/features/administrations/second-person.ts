@@ -1,6 +1,7 @@
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import { minutesBetween } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -58,6 +59,21 @@ export function wasRepeatedAlone(calculations: Calculations): boolean {
   const second = secondOf(calculations)
   return secondStands(calculations) && second?.recorded_by === firstOf(calculations)?.recorded_by
 }
+
+/** Who repeated alone what they worked out first, and how long after it; null where another person made the second. */
+export function aloneOf(calculations: Calculations): { by: string; minutes: number } | null {
+  const first = firstOf(calculations)
+  const second = secondOf(calculations)
+  if (!first || !second || !wasRepeatedAlone(calculations)) return null
+  const minutes = minutesBetween(first.recorded_at.toISOString(), second.recorded_at.toISOString())
+  return { by: second.by_name, minutes: Math.floor(minutes) }
+}
+
+/** The calculations as they stood when a dose went in. */
+export const calculationsBy = ({ all, seenBy }: Calculations, at: Date): Calculations => ({
+  all: all.filter((one) => one.recorded_at <= at),
+  seenBy,
+})
 
 /** Refuses a second calculation by somebody who may not make it now, and a repeat by the same person before its time. */
 export function refuseSecond(

@@ -12,6 +12,7 @@ import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
@@ -214,6 +215,19 @@ function givenBlock({ content, block, recorded }: OrderPaper): DocumentBlock {
   }
 }
 
+/** Doses that no second person calculated. */
+const aloneBlocks = ({ recorded }: OrderPaper): DocumentBlock[] =>
+  recorded.flatMap(({ dose_key: key, alone_by: by, alone_after_minutes: minutes }): DocumentBlock[] =>
+    by === null || minutes === null
+      ? []
+      : [
+          {
+            kind: 'paragraph',
+            text: orderPaper.alone({ key, calculated: doseWords.calculatedAloneBy({ by, minutes }) }),
+          },
+        ],
+  )
+
 /** A signed order on paper. Everything comes from the signed text, and the check of that text stands on every page. */
 export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const { content, block } = paper
@@ -274,6 +288,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       animalsBlock(paper),
       { kind: 'heading', text: orderPaper.givenHeading },
       givenBlock(paper),
+      ...aloneBlocks(paper),
       { kind: 'signatures', entries: [signatureEntry(block)] },
       { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
       standingCaution(),

@@ -218,6 +218,9 @@ export interface RecordedDoseRow {
   amount_entered_unit: string | null
   by_name: string | null
   ended_at: Date | null
+  /** Who calculated it a second time after themselves, and how many minutes later; null where another person did. */
+  alone_by: string | null
+  alone_after_minutes: number | null
 }
 
 /** What was recorded of the planned doses, over all versions of an order, the newest first. */
@@ -225,10 +228,21 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
   return db.query(
     `SELECT d.dose_key, d.kind, d.happened_at, d.amount_entered_value, d.amount_entered_unit,
             p.printed_name AS by_name,
-            (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at
+            (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
+            a.by_name AS alone_by, a.minutes AS alone_after_minutes
        FROM live_doses d
        JOIN order_versions v ON v.id = d.order_version_id
        LEFT JOIN people p ON p.id = d.recorded_by
+       LEFT JOIN LATERAL (
+         SELECT r.printed_name AS by_name,
+                floor(extract(epoch FROM c.recorded_at - f.recorded_at) / 60)::int AS minutes
+           FROM dose_calculations c
+           JOIN LATERAL (SELECT g.recorded_at, g.recorded_by FROM dose_calculations g
+                          WHERE g.order_version_id = c.order_version_id AND g.dose_key = c.dose_key
+                            AND g.part = 'first' AND g.recorded_at <= c.recorded_at
+                          ORDER BY g.recorded_at DESC, g.id DESC LIMIT 1) f ON f.recorded_by = c.recorded_by
+           JOIN people r ON r.id = c.recorded_by
+          WHERE c.id = d.second_calculation_id) a ON true
       WHERE v.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
     [orderId],
   )

@@ -79,7 +79,12 @@ export function SecondStanding({ sheet, zone }: { sheet: BathSheet; zone: string
     <section className="stack" aria-live="polite">
       <h2 className="t-head">{words.second}</h2>
       {isCurrent && !second.markCompared ? <p className="t-2">{words.markNotCompared}</p> : null}
-      {isCurrent && second.alone ? <p className="t-2">{words.secondByAlone}</p> : null}
+      {isCurrent && second.alone ? (
+        <p className="t-2">
+          {second.aloneText === null ? null : `${second.aloneText} `}
+          {words.secondByAlone}
+        </p>
+      ) : null}
       {isCurrent ? (
         <p className={second.agrees ? undefined : 'text-magenta t-strong'}>
           {second.agrees

@@ -32,6 +32,7 @@ const second = {
   differs: [],
   markCompared: true,
   alone: false,
+  aloneText: null,
   differencePercent: 0.5,
 }
 const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
