@@ -100,6 +100,9 @@ export const BathSheet = z.object({
     .nullable()
     .describe('Held, or ended; null while doses may be given'),
   state: z.enum(['due', 'running', 'done', 'held', 'ended', 'broken']).describe('Where this dose stands'),
+  record: SignatureBlock.shape.state.describe(
+    'Whether the order is what was signed, whatever became of this dose',
+  ),
   enclosureCode: z.string().describe('Enclosure whose water is treated'),
   enclosureName: z.string().describe('Its name'),
   drug: z.string().describe('Established name of the drug'),

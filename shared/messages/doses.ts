@@ -3,7 +3,8 @@ import { defineMessages } from './define-messages.ts'
 /** Words about giving and recording doses. */
 export const doseWords = defineMessages({
   anotherEnd: 'Another end of the same bath was recorded.',
-  unreadable: 'The signed text of this order cannot be read any more. Do not dose; tell the administrator.',
+  unreadable:
+    'The signed text of this order was changed or cannot be read any more. Do not dose; tell the administrator.',
   earlierOpen: (p: { key: string }) =>
     `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
   stillRunning: (p: { key: string; at: string }) =>

@@ -33,6 +33,7 @@ export const orderListWords = defineMessages({
   noDrug: 'no drug chosen yet',
   noAmount: 'not signed yet',
   amountWithheld: 'left out: calculated twice',
+  amountBroken: 'left out: record check failed',
   noStart: 'not planned yet',
   notSigned: 'not signed',
   version: (p: { n: number }) => `version ${String(p.n)}`,
@@ -149,7 +150,7 @@ export const orderViewWords = defineMessages({
   unknownKeyTitle: 'Signed with a key that is not known here',
   unknownKey:
     'Nothing shows that this is the text that was signed. Do not dose until the administrator has looked.',
-  unreadable: 'The signed text can’t be read any more.',
+  unreadable: 'The signed text was changed or can’t be read any more. None of its figures is shown.',
   check: (p: { fingerprint: string }) => `Record check ${p.fingerprint}`,
 
   versions: 'Versions',

@@ -3,7 +3,7 @@ import { counted, defineMessages } from './define-messages.ts'
 /** Words of treatment orders, on screen and on paper. */
 export const orderWords = defineMessages({
   stopIfUnreadable:
-    'What the order said about stopping cannot be read any more. Stop at any sign of distress.',
+    'What the order said about stopping cannot be relied on any more. Stop at any sign of distress.',
   order: 'Treatment order: bath',
   meaningAuthor: 'author of this order',
   lotOfOther: 'The lot is not one of the product that is ordered. Choose a lot of this product, or none.',
@@ -122,6 +122,7 @@ export const orderPaper = defineMessages({
   by: 'Given by',
   version: (p: { n: number }) => `version ${String(p.n)}`,
   title: (p: { number: string; n: number }) => `Treatment order ${p.number}, version ${String(p.n)}`,
+  changed: 'The text stored for this order is not the one that was signed. None of its figures is printed.',
   broken: 'Record check failed: this is not the text that was signed. Do not act on this page.',
   completed: 'All doses are recorded. Do not dose from this page.',
   discontinued: 'Discontinued. Do not dose from this page.',

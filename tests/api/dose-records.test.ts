@@ -100,6 +100,8 @@ describe('a dose under an order that is not what was signed', () => {
   it.each([
     ['text is not readable any more', `'x' || text`],
     ['text is another JSON', `'{"content":{"number":"TO-1"}}'`],
+    ['text was changed', `replace(text, '"stopIf"', '"stopIF"')`],
+    ['text says another amount', `replace(text, '218', '281')`],
   ])('whose %s is recorded, marked, and a veterinarian explains it', async (_, text) => {
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)
@@ -113,6 +115,7 @@ describe('a dose under an order that is not what was signed', () => {
       amountNow: null,
       enclosureCode: bath.tank.code,
     })
+    expect(JSON.stringify(sheet.body)).not.toContain('281')
     expect(sheet.body.why.join(' ')).toContain('cannot be read any more')
     expect(sheet.body.treated.join()).toContain('Yellow tang')
     expect((await house.calculateFirst(number)).body.code).toBe('broken-record')
@@ -122,6 +125,8 @@ describe('a dose under an order that is not what was signed', () => {
     const id = api.nextId()
     const recorded = await house.record(number, { id }).expect(201)
     expect(recorded.body.recorded).toMatchObject([{ id, kind: 'recorded' }])
+    // nothing wears the end of a course that nobody can read
+    expect((await agent.get(house.doseAt(number)).expect(200)).body.record).toBe('broken')
     const codes = recorded.body.recorded[0].exceptions.map(({ code }: { code: string }) => code)
     expect(codes).toContain('not-intact')
     expect(codes).not.toContain('amount-differs')

@@ -368,9 +368,17 @@ describe('an order for a bath', () => {
     await owner.query(`UPDATE signed_texts SET text = replace(text, '4.36', '43.6') WHERE subject_id = $1`, [
       draft.id,
     ])
-    expect(await textOf()).toContain('Record check failed')
+    const changed = await textOf()
+    expect(changed).toContain('Record check failed')
+    expect(changed).not.toMatch(/43\.6|4\.36/)
     const shown = await tech.agent.get(`/api/orders/${draft.number}`).expect(200)
-    expect(shown.body.versions[0].signature.state).toBe('broken')
+    expect(shown.body).toMatchObject({
+      record: 'broken',
+      amountText: null,
+      targetText: null,
+      versions: [{ content: null, signature: { state: 'broken' } }],
+    })
+    expect(JSON.stringify(shown.body)).not.toContain('43.6')
   })
 
   it('is listed by where it stands', async () => {

@@ -28,7 +28,7 @@ import type { SignedOverride } from './signed-overrides.ts'
 export interface DoseSituation {
   row: OrderRow
   versionId: string
-  /** False where the signed text cannot be read: `content` is then what the columns tell, and nothing is worked out. */
+  /** False where the signed text cannot be read or was changed: `content` is then what the columns tell, and nothing is worked out. */
   readable: boolean
   content: SignedOrder
   block: SignatureBlock

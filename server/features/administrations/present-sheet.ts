@@ -285,6 +285,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     calendar,
     standing: standingOf(situation),
     state: stateOf(situation, calendar),
+    record: situation.block.state,
     enclosureCode: content.enclosure.code,
     enclosureName: content.enclosure.name,
     drug: content.product.establishedName,

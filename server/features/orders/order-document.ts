@@ -21,7 +21,10 @@ import type { SignedOrder } from './order-content.ts'
 import type { RecordedDoseRow } from './orders.reads.ts'
 
 export interface OrderPaper {
+  /** What was signed; the columns beside it where the text was changed. */
   content: SignedOrder
+  /** The text is not the one that was signed: none of its figures is printed. */
+  isChanged: boolean
   block: SignatureBlock
   row: OrderRow
   /** What is recorded of its doses, the newest first. */
@@ -228,6 +231,47 @@ const aloneBlocks = ({ recorded }: OrderPaper): DocumentBlock[] =>
         ],
   )
 
+/** What an order says on paper, from its text. */
+function statements(paper: OrderPaper): DocumentBlock[] {
+  const { content } = paper
+  return [
+    {
+      kind: 'columns',
+      divided: true,
+      columns: [
+        { share: 1, blocks: [productBlock(paper)] },
+        { share: 1.25, blocks: [particulars(paper)] },
+      ],
+    },
+    { kind: 'rule' },
+    {
+      kind: 'heading',
+      text: orderPaper.volumeHeading({
+        volume: content.water.volumeText ?? '',
+        note: content.water.volumeNote ?? '',
+      }),
+    },
+    { kind: 'heading', text: orderPaper.workingHeading },
+    workingBlock(paper),
+    { kind: 'heading', text: orderPaper.conditionsHeading },
+    { kind: 'conditions', columns: 2, items: content.conditions.map((condition) => condition.text) },
+    { kind: 'heading', text: orderPaper.cautionsHeading },
+    ...cautionBlocks(paper),
+    { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
+    { kind: 'heading', text: orderPaper.animalsHeading },
+    animalsBlock(paper),
+    { kind: 'heading', text: orderPaper.givenHeading },
+    givenBlock(paper),
+    ...aloneBlocks(paper),
+  ]
+}
+
+/** In place of a changed text: that it is one, and when to stop a bath that runs. */
+const changedStatements = ({ content }: OrderPaper): DocumentBlock[] => [
+  { kind: 'paragraph', text: [{ text: orderPaper.changed, bold: true }] },
+  { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
+]
+
 /** A signed order on paper. Everything comes from the signed text, and the check of that text stands on every page. */
 export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const { content, block } = paper
@@ -235,7 +279,6 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const notice = orderNotice({ ...paper, versionNo: content.versionNo })
   const usesMicrolitres = content.targetText.includes('L/L')
   const treated = content.water.animals.filter((animal) => animal.treated)
-  const volume = content.water.volumeText ?? ''
   return {
     title: orderPaper.title({ number: content.number, n: content.versionNo }),
     language: 'en',
@@ -264,31 +307,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       note: documentWords.laterVersion,
     },
     blocks: [
-      {
-        kind: 'columns',
-        divided: true,
-        columns: [
-          { share: 1, blocks: [productBlock(paper)] },
-          { share: 1.25, blocks: [particulars(paper)] },
-        ],
-      },
-      { kind: 'rule' },
-      {
-        kind: 'heading',
-        text: orderPaper.volumeHeading({ volume, note: content.water.volumeNote ?? '' }),
-      },
-      { kind: 'heading', text: orderPaper.workingHeading },
-      workingBlock(paper),
-      { kind: 'heading', text: orderPaper.conditionsHeading },
-      { kind: 'conditions', columns: 2, items: content.conditions.map((condition) => condition.text) },
-      { kind: 'heading', text: orderPaper.cautionsHeading },
-      ...cautionBlocks(paper),
-      { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
-      { kind: 'heading', text: orderPaper.animalsHeading },
-      animalsBlock(paper),
-      { kind: 'heading', text: orderPaper.givenHeading },
-      givenBlock(paper),
-      ...aloneBlocks(paper),
+      ...(paper.isChanged ? changedStatements(paper) : statements(paper)),
       { kind: 'signatures', entries: [signatureEntry(block)] },
       { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
       standingCaution(),

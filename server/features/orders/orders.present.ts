@@ -115,6 +115,8 @@ export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
   const content = signedContent(row)
   const draft = row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields)
   const isOpen = phase === 'not-started' || phase === 'in-progress' || phase === 'held'
+  const record = recordOf(row)
+  const isBroken = record === 'broken'
   const next = standing.signed?.planned.find((dose) => !row.done_keys.includes(dose.key))
   return {
     id: row.id,
@@ -124,13 +126,14 @@ export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
     enclosureName: content?.enclosure.name ?? row.enclosure_name,
     agent: (content?.product.agent ?? row.agent) as OrderRow['agent'],
     problem: content?.fields.problem ?? draft?.problem ?? '',
-    amountText: blindKeys(row, now).length > 0 ? null : (content?.amount.text ?? null),
-    targetText: content?.targetText ?? null,
+    // beside a broken record stands no figure that somebody could dose by
+    amountText: isBroken || blindKeys(row, now).length > 0 ? null : (content?.amount.text ?? null),
+    targetText: isBroken ? null : (content?.targetText ?? null),
     startsAt: courseOf(row)?.startsAt ?? draft?.startsAt ?? null,
     signedBy: signedText(row)?.signedBy?.printedName ?? row.signed_by_name,
     signedAt: signedText(row)?.signedBy?.signedAt ?? row.signed_at?.toISOString() ?? null,
     versionNo: content?.versionNo ?? row.version_no,
-    record: recordOf(row),
+    record,
     dosesGiven: row.given,
     doses: courseOf(row)?.doses ?? null,
     nextDueAt: isOpen && next ? next.dueAt : null,

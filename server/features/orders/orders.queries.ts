@@ -17,7 +17,7 @@ import { openOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
-import { blindKeys, plannedOf, presentOrderRow, readText, signedContent } from './orders.present.ts'
+import { blindKeys, plannedOf, presentOrderRow, readText } from './orders.present.ts'
 import {
   readEvents,
   readOrder,
@@ -79,7 +79,13 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     const isWhole = differ.length === 0 && missingLinks(order.chain).length === 0
     const state = block.state === 'intact' && !isWhole ? 'broken' : block.state
     const read = isOrderText(content) ? content : null
-    return { content: read, block: { ...block, state: read || state === 'unknown-key' ? state : 'broken' } }
+    // a text that is not the one signed gives no figure to anybody; what columns say does not change the text
+    const isChanged = block.state === 'broken'
+    return {
+      content: isChanged ? null : read,
+      isChanged: read !== null && isChanged,
+      block: { ...block, state: read || state === 'unknown-key' ? state : 'broken' },
+    }
   }
 
   return {
@@ -122,9 +128,13 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       )
       const now = parts.now().toISOString()
       const isBlind = isBlindTo(row, now, actor)
+      const shown = presentOrderRow(row, now)
+      const inForce = sealed[0]
       return {
-        ...presentOrderRow(row, now),
-        amountText: isBlind ? null : (signedContent(row)?.amount.text ?? null),
+        ...shown,
+        record: inForce?.block.state === 'broken' ? 'broken' : shown.record,
+        amountText: isBlind ? null : (inForce?.content?.amount.text ?? null),
+        targetText: inForce?.content?.targetText ?? null,
         amountsWithheld: isBlind,
         version: row.version,
         draft: row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields),
@@ -193,7 +203,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       if (!wanted && missingLinks(row.chain).length > 0)
         throw new Problem('broken-record', { detail: orderProblemWords.versionGone })
       if (!wanted) throw new Problem('not-found', { detail: 'This order has no such signed version.' })
-      const { content, block } = await readVersion(row, wanted)
+      const { content, isChanged, block } = await readVersion(row, wanted)
       return {
         row: presentOrderRow(row, parts.now().toISOString()),
         recorded: await readRecordedDoses(parts.dataSource, row.id),
@@ -201,7 +211,9 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         versionNo: wanted.version_no,
         superseded: wanted !== versions[0],
         content,
-        /** What the columns tell of a version whose text cannot be read. */
+        /** The text can be read, and is not the one that was signed. */
+        isChanged,
+        /** What the columns tell of a version whose text cannot be read, or was changed. */
         standIn: standInOrder(row, wanted.copies),
         block,
       }

@@ -26,12 +26,14 @@ export interface PrintParts {
 export function createOrderPrinter(parts: PrintParts) {
   return async (number: string, version: number | undefined, actor: Actor, requestId: string) => {
     const sealed = await parts.queries.sealed(number, version)
-    if (!sealed.content)
+    const content = sealed.content ?? (sealed.isChanged ? sealed.standIn : null)
+    if (!content)
       throw new Problem('broken-record', {
         detail: 'The signed text of this order cannot be read any more. Tell the administrator; do not dose.',
       })
     const model = orderDocument({
-      content: drawable(sealed.content),
+      content: drawable(content),
+      isChanged: sealed.isChanged,
       block: sealed.block,
       row: sealed.row,
       recorded: sealed.recorded,

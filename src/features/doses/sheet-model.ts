@@ -39,6 +39,11 @@ export type NextAct =
   | 'in-the-water'
   | 'done'
 
+/** Whether the order is not known to be what was signed; a dose that is recorded already does not mend that. */
+export function isBroken({ state, record }: Pick<BathSheet, 'state' | 'record'>): boolean {
+  return state === 'broken' || record === 'broken' || record === 'unknown-key'
+}
+
 /** The dose that went in and has no end yet; the newest first. */
 export function openRecord(sheet: BathSheet): RecordedDose | null {
   return (

@@ -11,7 +11,7 @@ import { PairOfAmounts } from '../../ui/pair-of-amounts.tsx'
 import { WorkingBlock } from '../../ui/working-block.tsx'
 import { DoseText } from '../orders/index.ts'
 import { OverrideAct } from './override-dialog.tsx'
-import { otherCautions } from './sheet-model.ts'
+import { isBroken, otherCautions } from './sheet-model.ts'
 
 /** When the bath is stopped at once: on the sheet from the first look to the last. */
 export function StopCriteria({ sheet }: { sheet: BathSheet }) {
@@ -24,8 +24,8 @@ export function StopCriteria({ sheet }: { sheet: BathSheet }) {
 
 /** Held, ended or broken: said plainly, by whom, and what one may still do. */
 export function Standing({ sheet, zone }: { sheet: BathSheet; zone: string }) {
-  const { standing, state } = sheet
-  const broken = state === 'broken'
+  const { standing } = sheet
+  const broken = isBroken(sheet)
   if (!standing && !broken) return null
   const kind = standing?.kind
   const heading = broken

@@ -45,7 +45,7 @@ function Head({ order, more }: { order: Order; more: string }) {
           {words.source({ by: order.createdBy, at: sayInstant(order.createdAt, zone) })}
         </>
       }
-      flag={<PhaseTag phase={order.phase} />}
+      flag={<PhaseTag phase={order.phase} record={order.record} />}
     />
   )
 }
@@ -210,7 +210,12 @@ export function SignedOrder({
             </div>
           </>
         ) : (
-          <p className="pane">{words.unreadable}</p>
+          <div className="pane stack gap-5">
+            <p>{words.unreadable}</p>
+            {version.superseded ? null : (
+              <DoseCalendar order={order} zone={zone} now={now} sheets={record.allowed} />
+            )}
+          </div>
         )}
       </Area>
       <Area ground="land" className="area-order-side">

@@ -50,6 +50,12 @@ export function OrdersList({ list }: { list: ListState }) {
   )
 }
 
+/** Why a row has no amount. */
+function noAmountText({ versionNo, record }: OrderRow): string {
+  if (record === 'broken') return words.amountBroken
+  return versionNo === null ? words.noAmount : words.amountWithheld
+}
+
 function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderRow>[] {
   return [
     {
@@ -73,7 +79,7 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
       narrow: 'head',
       cell: (row) => (
         <>
-          <PhaseTag phase={row.phase} />
+          <PhaseTag phase={row.phase} record={row.record} />
           {row.record === 'broken' ? (
             <span className="text-magenta t-strong block">{words.recordBroken}</span>
           ) : null}
@@ -108,7 +114,7 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
       heading: words.amount,
       cell: (row) =>
         row.amountText === null ? (
-          <span className="t-2">{row.versionNo === null ? words.noAmount : words.amountWithheld}</span>
+          <span className="t-2">{noAmountText(row)}</span>
         ) : (
           <>
             <DoseText text={row.amountText} size="strong" />

@@ -8,7 +8,8 @@ const kinds: Partial<Record<OrderRow['phase'], 'solid' | 'done'>> = {
   completed: 'done',
 }
 
-/** Where an order stands, in words. */
-export function PhaseTag({ phase }: { phase: OrderRow['phase'] }) {
-  return <Tag kind={kinds[phase] ?? 'plain'}>{orderPhaseNames[phase]}</Tag>
+/** Where an order stands, in words. A broken record is never worn as done. */
+export function PhaseTag({ phase, record }: Pick<OrderRow, 'phase' | 'record'>) {
+  const kind = record === 'broken' && phase === 'completed' ? 'plain' : kinds[phase]
+  return <Tag kind={kind ?? 'plain'}>{orderPhaseNames[phase]}</Tag>
 }

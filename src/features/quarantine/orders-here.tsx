@@ -37,7 +37,7 @@ export function OrdersHere({ enclosures }: { enclosures: readonly string[] }) {
             )}
             , {order.enclosureCode}
           </span>
-          <PhaseTag phase={order.phase} />
+          <PhaseTag phase={order.phase} record={order.record} />
         </p>
       ))}
     </section>

@@ -9,6 +9,7 @@ import {
 import {
   amountUnits,
   doseToOpen,
+  isBroken,
   lotToOpen,
   nextAct,
   openSteps,
@@ -97,6 +98,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   cautions: [],
   overrides: [],
   steps: [],
+  record: 'intact',
   secondNeeded: true,
   first: null,
   second: null,
@@ -172,6 +174,12 @@ describe('the next act at the tank', () => {
     expect(othersMayAct(sheet({ state: 'running' }))).toBe(true)
     expect(othersMayAct(sheet())).toBe(false)
     expect(othersMayAct(sheet({ state: 'done', first }))).toBe(false)
+  })
+  it('is broken with its record, and stays so when every dose is recorded', () => {
+    for (const record of ['broken', 'unknown-key'] as const)
+      expect(isBroken(sheet({ state: 'done', record }))).toBe(true)
+    expect(isBroken(sheet({ state: 'broken' }))).toBe(true)
+    expect(isBroken(sheet({ state: 'done' }))).toBe(false)
   })
   it('is closed while the order is held, ended or broken', () => {
     for (const state of ['held', 'ended', 'broken'] as const) expect(nextAct(sheet({ state }))).toBe('closed')
