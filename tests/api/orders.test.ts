@@ -372,12 +372,8 @@ describe('an order for a bath', () => {
     expect(changed).toContain('Record check failed')
     expect(changed).not.toMatch(/43\.6|4\.36/)
     const shown = await tech.agent.get(`/api/orders/${draft.number}`).expect(200)
-    expect(shown.body).toMatchObject({
-      record: 'broken',
-      amountText: null,
-      targetText: null,
-      versions: [{ content: null, signature: { state: 'broken' } }],
-    })
+    expect(shown.body).toMatchObject({ record: 'broken', amountText: null, targetText: null })
+    expect(shown.body.versions[0]).toMatchObject({ content: null, signature: { state: 'broken' } })
     expect(JSON.stringify(shown.body)).not.toContain('43.6')
   })
 
