@@ -213,6 +213,16 @@ describe('a second calculation is blind', () => {
     expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
   })
 
+  it('nor by whoever began to write the order that another signed', async () => {
+    await house.freshWater(bath)
+    const number = await house.signedBath(bath, {}, house.second)
+    await house.calculateFirst(number).expect(201)
+    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
+    const keeper = await api.as('keeper')
+    await house.calculateSecond(bath, number, {}, keeper).expect(201)
+  })
+
   it('so the audit trail names no amount of it to a veterinarian who may be asked, and all of it to who signed', async () => {
     const other = await api.person({
       email: 'vet2@harrow-point.example',

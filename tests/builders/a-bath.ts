@@ -48,8 +48,8 @@ export async function aFormalinHouse(api: TestApi) {
       ...given,
     })
   /** A signed bath of 45 min at 100 µL/L for the school of a tank, due now. */
-  async function signedBath(bath: BathTank, given: object = {}): Promise<string> {
-    const draft = await aDraft(api, fieldsOf(bath, given))
+  async function signedBath(bath: BathTank, given: object = {}, begunBy?: TestPerson): Promise<string> {
+    const draft = await aDraft(api, fieldsOf(bath, given), begunBy)
     const signed = await signDraft(api, draft)
     if (signed.status !== 201) throw new Error(JSON.stringify(signed.body))
     return draft.number

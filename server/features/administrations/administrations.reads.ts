@@ -130,7 +130,7 @@ export function readCalculations(
 
 /**
  * People who know the amount of a dose that they did not work out blind: shown it before its two calculations agreed, or
- * recorded one, under any version of the order, or signed it. That an amended version has another amount does not make them forget the first.
+ * recorded one, under any version of the order, or signed it, or began to write it. That an amended version has another amount does not make them forget the first.
  */
 export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
   const rows: { person_id: string }[] = await db.query(
@@ -139,6 +139,8 @@ export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string
         WHERE v.order_id = (SELECT o.order_id FROM order_versions o WHERE o.id = $1))
      SELECT s.person_id FROM dose_amounts_seen s JOIN versions v ON v.id = s.order_version_id WHERE s.dose_key = $2
       UNION SELECT v.signed_by FROM versions v
+      UNION SELECT o.created_by FROM orders o JOIN order_versions v ON v.order_id = o.id
+             WHERE v.id = $1 AND o.created_by IS NOT NULL
       UNION SELECT f.recorded_by FROM dose_calculations f JOIN versions v ON v.id = f.order_version_id
              WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1
       UNION SELECT d.recorded_by FROM doses d JOIN versions v ON v.id = d.order_version_id

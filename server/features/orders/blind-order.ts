@@ -10,11 +10,11 @@ export const mayBeSecond = (actor: Actor): boolean =>
 
 /**
  * Whether an order is shown to somebody without its amount: they may be the second person of a dose that is still to
- * come, have not been shown it, and did not sign it.
+ * come, have not been shown it, and neither began nor signed it.
  */
 export function isBlindTo(row: OrderReadRow, now: string, actor: Actor): boolean {
   const keys = blindKeys(row, now)
-  if (keys.length === 0 || row.signers.some((id) => id === actor.personId)) return false
+  if (keys.length === 0 || row.writers.some((id) => id === actor.personId)) return false
   if (!mayBeSecond(actor)) return false
   const known = new Set(
     row.knowers.filter(({ personId }) => personId === actor.personId).map(({ key }) => key),
