@@ -17,6 +17,7 @@ import { PlainText1764600000029 } from './0029-plain-text.ts'
 import { RowMarks1764600000032 } from './0032-row-marks.ts'
 import { DoseOverrides1764600000033 } from './0033-dose-overrides.ts'
 import { EndsThatCount1764600000034 } from './0034-ends-that-count.ts'
+import { MarksByKey1764600000035 } from './0035-marks-by-key.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -40,4 +41,5 @@ export const migrations = [
   RowMarks1764600000032,
   DoseOverrides1764600000033,
   EndsThatCount1764600000034,
+  MarksByKey1764600000035,
 ]

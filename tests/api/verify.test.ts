@@ -145,6 +145,52 @@ describe('a kept row that another hand changed', () => {
     expect(await found('not-by-the-program', 'order_events ')).toHaveLength(1)
   })
 
+  it('is reported though it bears a time before anything else was written', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const hold = api.nextId()
+    await house.technician.agent
+      .post(`/api/orders/${number}/holds`)
+      .send({ id: hold, happenedAt: '2026-12-01T18:25:00Z' })
+      .expect(201)
+    const put = api.nextId()
+    await byHand([
+      `INSERT INTO order_events (id, order_id, kind, happened_at, happened_on, recorded_at, recorded_by)
+       SELECT $2, e.order_id, 'hold-lifted', e.happened_at, e.happened_on, '2020-01-01T00:00:00Z', e.recorded_by
+         FROM order_events e WHERE e.id = $1`,
+      hold,
+      put,
+    ])
+    expect(await found('not-by-the-program', `order_events ${put}`)).toHaveLength(1)
+  })
+
+  it('is reported where the row has no id of its own: whom an order treats, and which cases a look was of', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const rows = await owner.query<{ key: string }>(
+      `SELECT a.animal_id || '/' || a.order_version_id AS key FROM order_version_animals a
+         JOIN order_versions v ON v.id = a.order_version_id JOIN orders o ON o.id = v.order_id WHERE o.number = $1`,
+      [number],
+    )
+    const at = `order_version_animals ${String(rows.rows[0]?.key)}`
+    expect((await rowFaults()).filter((fault) => fault.at === at)).toEqual([])
+    const [animalId, versionId] = String(rows.rows[0]?.key).split('/')
+    await byHand([
+      `INSERT INTO order_version_animals (order_version_id, animal_id, taxon_id)
+       SELECT a.order_version_id, gen_random_uuid(), a.taxon_id FROM order_version_animals a
+        WHERE a.animal_id = $1 AND a.order_version_id = $2`,
+      animalId,
+      versionId,
+    ])
+    expect(await found('not-by-the-program', 'order_version_animals ')).toHaveLength(1)
+    await byHand([
+      `DELETE FROM order_version_animals WHERE animal_id = $1 AND order_version_id = $2`,
+      animalId,
+      versionId,
+    ])
+    expect(await found('missing', at)).toHaveLength(1)
+  })
+
   it('is reported of a signed clearance: its text against its columns, and a pointer that leads nowhere', async () => {
     const one = await aClearableCase(api)
     await clear(await api.as('veterinarian'), one).expect(200)

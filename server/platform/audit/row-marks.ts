@@ -2,20 +2,20 @@ import type { EntityManager } from 'typeorm'
 import type { Db } from '../database/db.ts'
 import { writtenBy } from '../database/written-rows.ts'
 
-/** Table → id → hash over the row as it was written. */
+/** Table → text of the primary key → hash over the row as it was written. */
 export type RowMarks = Record<string, Record<string, string>>
 
 /** The hashes of rows as they stand now; rows that are gone are left out. */
 export async function readMarks(
   db: Db,
   table: string,
-  ids: readonly string[],
+  keys: readonly string[],
 ): Promise<Record<string, string>> {
-  const rows: { id: string; mark: string }[] = await db.query(
-    'SELECT m.id, m.mark FROM row_marks($1::regclass, $2::uuid[]) m ORDER BY m.id',
-    [table, [...ids]],
+  const rows: { key: string; mark: string }[] = await db.query(
+    'SELECT m.key, m.mark FROM row_marks_by_key($1::regclass, $2::text[]) m ORDER BY m.key',
+    [table, [...keys]],
   )
-  return Object.fromEntries(rows.map(({ id, mark }) => [id, mark]))
+  return Object.fromEntries(rows.map(({ key, mark }) => [key, mark]))
 }
 
 /**
@@ -24,6 +24,6 @@ export async function readMarks(
  */
 export async function marksOfWritten(manager: EntityManager): Promise<RowMarks | null> {
   const marks: RowMarks = {}
-  for (const [table, ids] of writtenBy(manager)) marks[table] = await readMarks(manager, table, [...ids])
+  for (const [table, keys] of writtenBy(manager)) marks[table] = await readMarks(manager, table, [...keys])
   return Object.keys(marks).length === 0 ? null : marks
 }

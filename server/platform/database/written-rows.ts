@@ -2,7 +2,7 @@ import { EventSubscriber } from 'typeorm'
 import type { EntityManager, EntitySubscriberInterface, InsertEvent, QueryRunner } from 'typeorm'
 import { tableKinds } from './table-kinds.ts'
 
-/** Ids by table, of append-only tables. */
+/** Primary keys by table, of append-only tables. */
 export type Written = ReadonlyMap<string, ReadonlySet<string>>
 
 const written = new WeakMap<QueryRunner, Map<string, Set<string>>>()
@@ -11,11 +11,11 @@ const written = new WeakMap<QueryRunner, Map<string, Set<string>>>()
 const isKept = (table: string) => tableKinds[table] === 'ledger' || tableKinds[table] === 'sealed'
 
 /** Notes a row that a query of its own wrote; rows written through their entity are noted by themselves. */
-export function noteWritten(runner: QueryRunner | undefined, table: string, id: string): void {
+export function noteWritten(runner: QueryRunner | undefined, table: string, key: string): void {
   if (!runner || !isKept(table)) return
   const tables = written.get(runner) ?? new Map<string, Set<string>>()
-  const ids = tables.get(table) ?? new Set<string>()
-  written.set(runner, tables.set(table, ids.add(id)))
+  const keys = tables.get(table) ?? new Set<string>()
+  written.set(runner, tables.set(table, keys.add(key)))
 }
 
 /** What the transaction of a manager has written into append-only tables so far. */
@@ -25,8 +25,12 @@ export function writtenBy(manager: EntityManager): Written {
 
 /** Hears of every row that is written through its entity, by whatever feature. */
 @EventSubscriber()
-export class WrittenRows implements EntitySubscriberInterface<{ id?: unknown }> {
-  afterInsert({ queryRunner, metadata, entity }: InsertEvent<{ id?: unknown }>): void {
-    if (typeof entity.id === 'string') noteWritten(queryRunner, metadata.tableName, entity.id)
+export class WrittenRows implements EntitySubscriberInterface<Record<string, unknown>> {
+  afterInsert({ queryRunner, metadata, entity }: InsertEvent<Record<string, unknown>>): void {
+    // the columns of the key by name, as the database puts them together
+    const columns = [...metadata.primaryColumns].sort((a, b) => (a.databaseName < b.databaseName ? -1 : 1))
+    const values = columns.map(({ propertyName }) => entity[propertyName])
+    if (values.every((value) => typeof value === 'string'))
+      noteWritten(queryRunner, metadata.tableName, values.join('/'))
   }
 }

@@ -1,0 +1,39 @@
+import type { Db } from '../database/db.ts'
+import { tableKinds } from '../database/table-kinds.ts'
+
+/** Written by the server for itself; they hold no facts. */
+const withoutMarks = new Set(['migrations', 'audit_entries', 'sign_in_tries', 'record_requests'])
+export const keptTables = Object.entries(tableKinds)
+  .filter(([name, kind]) => (kind === 'ledger' || kind === 'sealed') && !withoutMarks.has(name))
+  .map(([name]) => name)
+
+export interface KeptTable {
+  table: string
+  /** The text of a row's primary key, as an expression over `t`. */
+  keySql: string
+  /** Column with the time of the record, where the table has one. */
+  timeColumn: string | null
+}
+
+const times = ['recorded_at', 'signed_at', 'declared_at', 'confirmed_at', 'proposed_at']
+
+/** The append-only tables that exist now; a migration may read them before the last of them is there. */
+export async function readKeptTables(db: Db): Promise<KeptTable[]> {
+  const rows: { table: string; key_sql: string; columns: string[] }[] = await db.query(
+    `SELECT r.relname AS table,
+            (SELECT 'concat_ws(''/'', ' || string_agg(format('t.%I', a.attname), ', ' ORDER BY a.attname COLLATE "C") || ')'
+               FROM pg_index i JOIN pg_attribute a ON a.attrelid = i.indrelid AND a.attnum = ANY (i.indkey)
+              WHERE i.indrelid = r.oid AND i.indisprimary) AS key_sql,
+            (SELECT array_agg(a.attname::text) FROM pg_attribute a
+              WHERE a.attrelid = r.oid AND a.attnum > 0 AND NOT a.attisdropped) AS columns
+       FROM pg_class r JOIN pg_namespace s ON s.oid = r.relnamespace
+      WHERE s.nspname = 'public' AND r.relkind = 'r' AND r.relname = ANY ($1)
+      ORDER BY r.relname`,
+    [keptTables],
+  )
+  return rows.map(({ table, key_sql, columns }) => ({
+    table,
+    keySql: key_sql,
+    timeColumn: (columns.includes('id') && times.find((name) => columns.includes(name))) || null,
+  }))
+}
