@@ -164,7 +164,7 @@ describe('a kept row that another hand changed', () => {
     expect(await found('not-by-the-program', `order_events ${put}`)).toHaveLength(1)
   })
 
-  it('is reported where the row has no id of its own: whom an order treats, and which cases a look was of', async () => {
+  it('is reported where the row has no id of its own, as of whom an order treats', async () => {
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)
     const rows = await owner.query<{ key: string }>(
