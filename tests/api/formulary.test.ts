@@ -107,6 +107,22 @@ describe('the formulary', () => {
     expect((await refuse({ value: '1,234.5.6', unit: 'percent_w_w' })).detail.length).toBeGreaterThan(10)
   })
 
+  it('refuses more in a millilitre than it weighs, where the label is entered and not at the order', async () => {
+    const tech = await api.as('technician')
+    const enter = (change: object) =>
+      tech.agent.post('/api/products').send(product({ agent: 'formalin', form: 'liquid', ...change }))
+    const of = (value: string) => ({ strength: { value, unit: 'mg/mL' } })
+    const refused = await enter(of('2000')).expect(422)
+    expect(refused.body.errors[0]).toMatchObject({ pointer: '/strength', code: 'strength-above-all' })
+    expect(refused.body.detail).toMatch(/cannot be more than 1080 mg\/mL.*Check the number and its unit/)
+    const peroxide = { agent: 'hydrogen-peroxide', density: { value: '1.13', unit: 'g/mL' } }
+    await enter({ ...of('1131'), ...peroxide }).expect(422)
+    await enter({ ...of('396'), ...peroxide }).expect(201)
+    await enter({ ...of('2001'), agent: 'copper-sulfate' }).expect(422)
+    const light = await enter({ ...of('400'), density: { value: '0.4', unit: 'g/mL' } }).expect(422)
+    expect(light.body.errors[0].pointer).toBe('/density')
+  })
+
   it('shows why a lot may not be used', async () => {
     const tech = await api.as('technician')
     const entered = product()

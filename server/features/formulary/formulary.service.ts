@@ -73,7 +73,7 @@ export function createFormularyService(parts: FormularyParts) {
     },
 
     async enterProduct(context: RequestContext, given: BodyOf<typeof contracts.enterProduct>): Promise<void> {
-      const strength = checkStrength(given.strength)
+      const strength = checkStrength(given)
       const densityGPerMl = checkDensity(given.density)
       await parts.transactions.inTransaction(context, async (tx) => {
         const row = {
