@@ -227,6 +227,7 @@ export const listDueDoses = contract({
               .string()
               .nullable()
               .describe('Signed amount; withheld where a second person is to work it out blind'),
+            broken: z.boolean().describe('The order is not what was signed: nothing is given by it'),
             state: z.enum(['due', 'late', 'running', 'held']).describe('Where it stands'),
           }),
         )

@@ -85,13 +85,13 @@ export const animalRefusals = defineMessages({
 /** A doubtful weight, asked back. */
 export const weightDoubts = defineMessages({
   'far-below-band': (p) =>
-    `${p.weight} is less than a fifth of what a ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
+    `${p.weight} is less than a fifth of what one ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
   'far-above-band': (p) =>
-    `${p.weight} is more than five times what a ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
+    `${p.weight} is more than five times what one ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
   'below-band': (p) =>
-    `${p.weight} is less than a ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
+    `${p.weight} is less than one ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
   'above-band': (p) =>
-    `${p.weight} is more than a ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
+    `${p.weight} is more than one ${p.taxon} weighs (${p.band}). Check the number and its unit. If it is right, say why.`,
   'unlike-the-last': (p) =>
     `${p.weight} is very unlike the weight before, ${p.newest}. Check the number and its unit. If it is right, say why.`,
 } satisfies Record<WeightDoubt, (p: WeightDoubtWords) => string>)

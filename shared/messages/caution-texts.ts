@@ -318,7 +318,7 @@ export const cautionTexts = defineMessages({
   'plan-long': (p) =>
     `From the first dose to the last it is ${days(p.days)}, more than ${days(p.limitDays)}. Animals and water will not be as they are judged now.`,
   'doses-carried': (p) =>
-    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given under an earlier version, the last at ${p.lastAt}. They count: the next is dose ${p.given + 1}.`,
+    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given already, the last at ${p.lastAt}. They count: the next is dose ${p.given + 1}.`,
   'plan-counts-given': (p) =>
     `The plan begins at ${p.startsAt}, and ${counted(p.given, 'dose was', 'doses were')} given before, the last at ${p.lastAt}. They count as the first of the ${counted(p.planned, 'planned dose', 'planned doses')}: the next is dose ${p.given + 1}.`,
   'test-missing': (p) => `No reading of ${p.reading}. It has to be at most ${minutes(p.maxAgeMinutes)} old.`,

@@ -4,11 +4,19 @@ const cases = (count: number) => counted(count, 'case', 'cases')
 const animals = (count: number) => counted(count, 'animal', 'animals')
 const days = (count: number) => counted(count, 'day', 'days')
 
+/** How many cases stand in a view; null while they are fetched. */
+interface Tally {
+  count: number | null
+}
+const tallied = (view: string, { count }: Tally) => (count === null ? view : `${view} ${count}`)
+const dayZero = 'Day 0 is the day the last of a batch came in.'
+
 /** The board and the sheet of a quarantine case. */
 export const quarantineWords = defineMessages({
   title: 'Quarantine',
   boardSource: (p: { cases: number; animals: string; offset: string }) =>
-    `${cases(p.cases)} in this view, ${p.animals}. Day 0 is the day the last of a batch came in. Times are facility time, ${p.offset}.`,
+    `${cases(p.cases)} in this view, ${p.animals}. ${dayZero} Times are facility time, ${p.offset}.`,
+  boardSourceFetching: (p: { offset: string }) => `${dayZero} Times are facility time, ${p.offset}.`,
   animalsCounted: (p: { count: number }) => animals(p.count),
   animalsBetween: (p: { low: number; high: number }) => `${p.low} to ${animals(p.high)}`,
   animalsOf: (p: { now: number; before: number }) => `${p.now} of ${animals(p.before)}`,
@@ -16,12 +24,12 @@ export const quarantineWords = defineMessages({
   openCase: 'Open a case',
   rounds: 'Rounds',
   view: 'Which cases',
-  viewRunning: (p: { count: number }) => `Running ${p.count}`,
-  viewDue: (p: { count: number }) => `Due today ${p.count}`,
-  viewOverdue: (p: { count: number }) => `Overdue ${p.count}`,
-  viewReady: (p: { count: number }) => `Ready to clear ${p.count}`,
-  viewHeld: (p: { count: number }) => `Held ${p.count}`,
-  viewEnded: (p: { count: number }) => `Ended ${p.count}`,
+  viewRunning: (p: Tally) => tallied('Running', p),
+  viewDue: (p: Tally) => tallied('Due today', p),
+  viewOverdue: (p: Tally) => tallied('Overdue', p),
+  viewReady: (p: Tally) => tallied('Ready to clear', p),
+  viewHeld: (p: Tally) => tallied('Held', p),
+  viewEnded: (p: Tally) => tallied('Ended', p),
   order: 'Order',
   byClearance: 'By clearance date',
   byWork: 'By order of work',

@@ -122,6 +122,7 @@ const notes = defineMessages({
           t.text('number'),
           `dose ${t.text('key')}`,
           t.has('held') && 'held, not to be given until a veterinarian lifts it',
+          t.has('broken') && 'its text is not the one that was signed: nothing is given by it',
         ),
   'order-not-carried-out': (t: Told) =>
     `${beside(t.text('problem'), t.drug)}. ${t.text('given')} of ${counted(t.number('doses'), 'dose', 'doses')} recorded. Record what was given or withheld.`,

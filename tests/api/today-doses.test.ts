@@ -1,3 +1,4 @@
+import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import {
   aBathWater,
@@ -93,6 +94,23 @@ describe('doses on the worklist', () => {
       'technician',
       'keeper',
     ])
+  })
+
+  it('of an order that is not what was signed are listed so, without a figure', async () => {
+    const number = await aSigned()
+    const [before] = await worklist.itemsOf('technician', 'dose', number)
+    expect(before?.params).not.toHaveProperty('broken')
+    const owner = new pg.Client({ connectionString: api.ownerUrl })
+    await owner.connect()
+    await owner.query(
+      `UPDATE signed_texts SET text = replace(text, '218', '2180')
+        WHERE subject_id = (SELECT id FROM orders WHERE number = $1)`,
+      [number],
+    )
+    await owner.end()
+    const [after] = await worklist.itemsOf('technician', 'dose', number)
+    expect(after?.params).toMatchObject({ number, key: '1', broken: 1 })
+    expect(after?.params).not.toHaveProperty('amount')
   })
 
   it('several late ones of an order are one item, the first', async () => {

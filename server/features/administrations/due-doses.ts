@@ -47,6 +47,7 @@ export async function findDueDoses(
         drug: row.agent ? agentNames[row.agent] : '',
         // nobody is to know the amount beforehand who may be the second to work it out
         amountText: secondCalculation ? null : row.amountText,
+        broken: row.record === 'broken',
         state:
           state === 'running' ? 'running' : row.phase === 'held' ? 'held' : state === 'late' ? 'late' : 'due',
       })

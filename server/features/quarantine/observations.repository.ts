@@ -117,7 +117,7 @@ export function findBodiesEvents(tx: Tx, observationId: string): Promise<BodiesE
             EXISTS (SELECT 1 FROM live_case_events s
                      WHERE s.kind = 'death-cause-signed' AND s.facts ->> 'deathEventId' = e.id::text) AS is_signed
        FROM live_case_events e JOIN quarantine_cases c ON c.id = e.case_id
-      WHERE e.observation_id = $1 AND e.kind = 'death'
+      WHERE e.observation_id = $1 AND e.kind = 'death' AND e.facts ->> 'diedElsewhereId' IS NULL
       ORDER BY c.number, e.id`,
     [observationId],
   )

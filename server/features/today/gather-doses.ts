@@ -88,6 +88,7 @@ function plannedItems(due: Due, moment: Moment): TodayWork[] {
       enclosure: row.enclosureCode,
       drug: row.drug,
       ...(row.amountText === null ? {} : { amount: row.amountText }),
+      ...(row.broken ? { broken: 1 } : {}),
     }
     const told = {
       id: `dose:${row.number}:${row.key}`,

@@ -59,6 +59,7 @@ export function QuarantineBoard() {
   })
   const filtered = Boolean(filter.q ?? filter.protocol ?? filter.boundary ?? filter.view)
   const { nextCursor } = reply ?? {}
+  const offset = sayOffset(new Date().toISOString(), zone)
   const phone = useMedia('(max-width: 600px)')
   const filters = (
     <BoardFilters
@@ -75,11 +76,11 @@ export function QuarantineBoard() {
         <div className="sheet-head">
           <Cartouche
             title={words.title}
-            source={words.boardSource({
-              cases: reply?.total ?? 0,
-              animals: animalsText(animals),
-              offset: sayOffset(new Date().toISOString(), zone),
-            })}
+            source={
+              reply
+                ? words.boardSource({ cases: reply.total, animals: animalsText(animals), offset })
+                : words.boardSourceFetching({ offset })
+            }
           />
           <div className="sheet-tools">
             <div className="row row-wrap">
@@ -204,7 +205,7 @@ const noNames = { cases: {}, criteria: {}, tests: {} }
 type ShownView = (typeof shownViews)[number]
 
 function viewLabel(view: ShownView, tally: Record<ShownView, number> | undefined): string {
-  const count = tally?.[view] ?? 0
+  const count = tally ? tally[view] : null
   return {
     running: words.viewRunning({ count }),
     due: words.viewDue({ count }),
