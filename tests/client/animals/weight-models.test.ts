@@ -185,7 +185,7 @@ describe('a typed weight', () => {
       range: `plausible: 10 to 100${nbsp}kg`,
     })
     const heavy = judgeTypedWeight(ray, { value: '1000', unit: 'kg' }, 1)
-    expect(heavy.asks).toContain(`1,000${nbsp}kg is more than five times what a Southern stingray weighs`)
+    expect(heavy.asks).toContain(`1,000${nbsp}kg is more than five times what one Southern stingray weighs`)
     expect(judgeTypedWeight(ray, { value: '41.6', unit: 'g' }, 1).asks).toContain('less than a fifth')
   })
 
