@@ -18,6 +18,7 @@ import { RowMarks1764600000032 } from './0032-row-marks.ts'
 import { DoseOverrides1764600000033 } from './0033-dose-overrides.ts'
 import { EndsThatCount1764600000034 } from './0034-ends-that-count.ts'
 import { MarksByKey1764600000035 } from './0035-marks-by-key.ts'
+import { AmountsPreviewed1764600000036 } from './0036-amounts-previewed.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -42,4 +43,5 @@ export const migrations = [
   DoseOverrides1764600000033,
   EndsThatCount1764600000034,
   MarksByKey1764600000035,
+  AmountsPreviewed1764600000036,
 ]

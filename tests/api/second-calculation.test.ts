@@ -201,16 +201,32 @@ describe('a second calculation is blind', () => {
 
   it('nor by whoever worked the same drug out for the same water, as an order being written', async () => {
     const other = await house.tankWithSchool()
-    const number = await aBathToCalculate()
+    const own = await house.tankWithSchool()
+    const number = await house.signedBath(own)
+    await house.freshWater(own)
+    await house.calculateFirst(number).expect(201)
     const preview = async (of: BathTank, given: object = {}) =>
       (await house.second.agent.post('/api/order-previews').send(house.fieldsOf(of, given)).expect(200)).body
         .amount
     expect(await preview(other)).not.toBeNull()
-    expect(await preview(bath, { target: null })).toBeNull()
+    expect(await preview(own, { target: null })).toBeNull()
     expect((await blindSheet(number, house.second)).secondShut).toBeNull()
-    expect(await preview(bath)).toMatchObject({ measured: bathAmount })
+    expect(await preview(own)).toMatchObject({ measured: bathAmount })
     expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
-    expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
+    expect((await house.calculateSecond(own, number)).body.code).toBe('another-person-needed')
+  })
+
+  it('nor by whoever had worked it out before the order was signed', async () => {
+    const own = await house.tankWithSchool()
+    await house.freshWater(own)
+    const keeper = await api.as('keeper')
+    const look = await house.second.agent.post('/api/order-previews').send(house.fieldsOf(own)).expect(200)
+    expect(look.body.amount).toMatchObject({ measured: bathAmount })
+    const number = await house.signedBath(own)
+    await house.calculateFirst(number).expect(201)
+    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.calculateSecond(own, number)).body.code).toBe('another-person-needed')
+    expect((await blindSheet(number, keeper)).secondShut).toBeNull()
   })
 
   it('nor by whoever began to write the order that another signed', async () => {

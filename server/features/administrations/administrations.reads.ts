@@ -141,6 +141,7 @@ export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string
       UNION SELECT v.signed_by FROM versions v
       UNION SELECT o.created_by FROM orders o JOIN order_versions v ON v.order_id = o.id
              WHERE v.id = $1 AND o.created_by IS NOT NULL
+      UNION SELECT p.person_id FROM order_previewers p JOIN order_versions v ON v.order_id = p.order_id WHERE v.id = $1
       UNION SELECT f.recorded_by FROM dose_calculations f JOIN versions v ON v.id = f.order_version_id
              WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1
       UNION SELECT d.recorded_by FROM doses d JOIN versions v ON v.id = d.order_version_id

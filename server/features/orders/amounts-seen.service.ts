@@ -1,9 +1,11 @@
+import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { Transactions } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
-import { insertSeen } from './amounts-seen.repository.ts'
+import { insertPreviewed, insertSeen, readNotPreviewed } from './amounts-seen.repository.ts'
+import { mayBeSecond } from './blind-order.ts'
 import type { OrderSituation } from './order-situation.ts'
 import type { OrderQueries } from './orders.queries.ts'
 import { readNumbersLike } from './orders.reads.ts'
@@ -39,16 +41,33 @@ export function createAmountsSeen(parts: {
 
 /**
  * Whoever works an order out while it is being written is shown what the same drug in the same water comes to: of the
- * orders in force for it as well.
+ * orders in force for it, and of one that is signed for it afterwards.
  */
 export function createAmountsPreviewed(parts: {
   dataSource: Db
+  transactions: Transactions
+  ids: Ids
   noteAmountsSeen: NoteAmountsSeen
 }): NoteAmountsPreviewed {
   return async (context, { situation, product, judgement }) => {
-    if (!product || !judgement?.dose) return
-    const enclosureIds = situation.water.enclosures.map(({ id }) => id)
-    const numbers = await readNumbersLike(parts.dataSource, { enclosureIds, agent: product.agent })
+    const { personId } = context.actor
+    if (!product || !judgement?.dose || personId === null || !mayBeSecond(context.actor)) return
+    const { agent } = product
+    const { enclosures } = situation.water
+    const enclosureIds = enclosures.map(({ id }) => id)
+    const numbers = await readNumbersLike(parts.dataSource, { enclosureIds, agent })
     for (const number of numbers) await parts.noteAmountsSeen(context, number)
+    const on = facilityDateOf(judgement.facts.at, judgement.facts.zone)
+    const fresh = await readNotPreviewed(parts.dataSource, { enclosureIds, agent, personId, on })
+    if (fresh.length === 0) return
+    await parts.transactions.inTransaction(context, async (tx) => {
+      for (const { id, code } of enclosures.filter((one) => fresh.includes(one.id)))
+        if (await insertPreviewed(tx, { id: parts.ids.next(), enclosureId: id, agent, personId, on }))
+          tx.audit({
+            action: 'dose.preview-amount',
+            subject: { kind: 'enclosure', id, label: code },
+            after: { agent },
+          })
+    })
   }
 }

@@ -82,7 +82,7 @@ export function createOrders(parts: OrdersOutside) {
   })
   const queries = createOrderQueries({ dataSource, signing, now })
   const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
-  const noteAmountsPreviewed = createAmountsPreviewed({ dataSource, noteAmountsSeen })
+  const noteAmountsPreviewed = createAmountsPreviewed({ ...parts, noteAmountsSeen })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)

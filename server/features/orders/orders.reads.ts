@@ -35,7 +35,7 @@ export interface OrderReadRow {
   held: boolean
   ended: boolean
   done_keys: string[]
-  /** Whoever began or signed it: both saw what it comes to. */
+  /** Whoever began or signed it, or had worked the same out before: all saw what it comes to. */
   writers: (string | null)[]
   /** Who knows the amount of which of its doses, under any of its versions: shown it, the first to work it out, or who recorded one. */
   knowers: { personId: string; key: string }[]
@@ -84,7 +84,9 @@ const columns = `
              WHERE x.order_id = o.id AND l.part = 'first'
       UNION SELECT d.recorded_by, d.dose_key FROM doses d JOIN order_versions x ON x.id = d.order_version_id
              WHERE x.order_id = o.id AND d.amount_entered_value IS NOT NULL) k), '[]') AS knowers,
-  array_append((SELECT array_agg(DISTINCT x.signed_by) FROM order_versions x WHERE x.order_id = o.id), o.created_by) AS writers,
+  ARRAY(SELECT x.signed_by FROM order_versions x WHERE x.order_id = o.id
+        UNION SELECT o.created_by
+        UNION SELECT p.person_id FROM order_previewers p WHERE p.order_id = o.id) AS writers,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
 

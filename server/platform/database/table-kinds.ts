@@ -49,6 +49,7 @@ export const tableKinds: Record<string, TableKind> = {
   order_events: 'ledger',
   dose_calculations: 'ledger',
   dose_amounts_seen: 'ledger',
+  amounts_previewed: 'ledger',
   doses: 'ledger',
   bath_stops: 'ledger',
   dose_voids: 'ledger',
