@@ -3,6 +3,7 @@ import { aBathWater, aDraft, aProduct, aSchool, bathFields, signDraft } from '..
 import { layoutOf, pageCount, textOf } from '../pdf/support/poppler.ts'
 import { newKey, startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
+import { fetchPdf } from '../support/fetch-pdf.ts'
 
 let api: TestApi
 let fields: ReturnType<typeof bathFields>
@@ -27,20 +28,7 @@ async function aSigned(given: object = {}) {
   return { number: draft.number, hash: signed.body.versions[0].signature.hash as string }
 }
 
-async function printed(path: string): Promise<Uint8Array> {
-  const { agent } = await api.as('technician')
-  const reply = await agent
-    .get(path)
-    .buffer(true)
-    .parse((res, done) => {
-      const chunks: Buffer[] = []
-      res.on('data', (chunk: Buffer) => chunks.push(chunk))
-      res.on('end', () => done(null, Buffer.concat(chunks)))
-    })
-    .expect(200)
-  expect(reply.headers['content-type']).toContain('application/pdf')
-  return reply.body as Uint8Array
-}
+const printed = async (path: string) => fetchPdf(await api.as('technician'), path)
 
 const check = async (hash: string) =>
   (await (await api.as('keeper')).agent.get(`/api/checks/${hash.slice(0, 16)}`).expect(200)).body

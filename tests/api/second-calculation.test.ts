@@ -4,6 +4,7 @@ import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
 import { textOf } from '../pdf/support/poppler.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
+import { fetchPdf } from '../support/fetch-pdf.ts'
 
 let api: TestApi
 let house: FormalinHouse
@@ -22,18 +23,8 @@ const aBathToCalculate = async () => {
   await house.calculateFirst(number).expect(201)
   return number
 }
-async function pdfText(by: TestPerson, path: string): Promise<string> {
-  const reply = await by.agent
-    .get(path)
-    .buffer(true)
-    .parse((res, done) => {
-      const chunks: Buffer[] = []
-      res.on('data', (chunk: Buffer) => chunks.push(chunk))
-      res.on('end', () => done(null, Buffer.concat(chunks)))
-    })
-    .expect(200)
-  return textOf(reply.body as Uint8Array).replaceAll(/\s+/g, ' ')
-}
+const pdfText = async (by: TestPerson, path: string) =>
+  textOf(await fetchPdf(by, path)).replaceAll(/\s+/g, ' ')
 const blindSheet = async (number: string, by: TestPerson) =>
   (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
 
