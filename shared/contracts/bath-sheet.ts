@@ -81,6 +81,16 @@ export const RecordedDose = z.object({
 })
 export type RecordedDose = z.infer<typeof RecordedDose>
 
+/** A timed bath that went in and has no end. */
+export const RunningBath = z.object({
+  doseId: RecordId,
+  key: DoseKey,
+  startedAt: Instant,
+  endsAt: Instant.describe('By the contact time of the version that it was given under'),
+  by: z.string().describe('Who recorded it'),
+})
+export type RunningBath = z.infer<typeof RunningBath>
+
 /** One planned dose as the person at the tank needs it, judged now. */
 export const BathSheet = z.object({
   number: OrderNumber,
@@ -217,6 +227,11 @@ export const BathSheet = z.object({
   mayStart: z.boolean().describe('Nothing stands in the way of giving it now'),
   why: z.array(z.string()).describe('What stands in the way'),
   recorded: z.array(RecordedDose).describe('Records of this dose'),
+  running: z
+    .array(RunningBath)
+    .describe(
+      'Every timed bath of the order that has no end, of this dose or another, the first to end first',
+    ),
   may: May,
 })
 export type BathSheet = z.infer<typeof BathSheet>

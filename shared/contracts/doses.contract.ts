@@ -6,7 +6,7 @@ import { OrderNumber } from './order-primitives.ts'
 import { EnteredQuantity, Instant, Reason, RecordId } from './primitives.ts'
 import { actAddresses } from './today.addresses.ts'
 
-export { BathSheet, RecordedDose } from './bath-sheet.ts'
+export { BathSheet, RecordedDose, RunningBath } from './bath-sheet.ts'
 
 const doseParams = z.strictObject({ number: OrderNumber, key: DoseKey })
 

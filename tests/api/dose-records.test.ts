@@ -1,7 +1,9 @@
 import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { aFormalinHouse } from '../builders/a-bath.ts'
+import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { FormalinHouse } from '../builders/a-bath.ts'
+import { textOf } from '../pdf/support/poppler.ts'
+import { fetchPdf } from '../support/fetch-pdf.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -89,6 +91,55 @@ describe('an order of several baths', () => {
     await stopBath(id, '2026-12-01T22:00:00Z').expect(201)
     const after = await house.technician.agent.get(`/api/orders?q=${number}`).expect(200)
     expect(after.body.rows[0].phase).toBe('expired')
+  })
+
+  it('of which two run at once tells of each with its own end, and of none that all is done', async () => {
+    const number = await house.signedBath(await house.tankWithSchool(), { doses: 2, intervalHours: 1 })
+    const [one, two] = [api.nextId(), api.nextId()]
+    const at = (key: string, rest = '') => house.doseAt(number).replace('/1', `/${key}`) + rest
+    const sheet = async (key: string) =>
+      (await house.technician.agent.get(`${at(key)}?blind=yes`).expect(200)).body
+    const goesIn = (id: string, key: string, happenedAt: string) =>
+      house.technician.agent.post(at(key, '/record')).send({
+        id,
+        kind: 'recorded',
+        happenedAt,
+        amount: bathAmount,
+        lotId: house.formalin.lotId,
+      })
+    await goesIn(two, '2', '2026-12-01T18:15:00Z').expect(201)
+    await goesIn(one, '1', '2026-12-01T18:10:00Z').expect(201)
+    const running = [
+      { doseId: one, key: '1', startedAt: '2026-12-01T18:10:00.000Z', endsAt: '2026-12-01T18:55:00.000Z' },
+      { doseId: two, key: '2', startedAt: '2026-12-01T18:15:00.000Z', endsAt: '2026-12-01T19:00:00.000Z' },
+    ]
+    for (const key of ['1', '2'])
+      expect(await sheet(key)).toMatchObject({ state: 'running', standing: null, running })
+    const listed = await house.technician.agent.get(`/api/orders?q=${number}`).expect(200)
+    expect(listed.body.rows[0].phase).toBe('in-progress')
+    const paper = textOf(await fetchPdf(house.technician, `/api/orders/${number}/print`))
+    expect(paper.replaceAll(/\s+/g, ' ')).toContain(
+      'No dose is to come, and a bath runs. Do not dose from this page.',
+    )
+
+    // the first is over, by its own sheet; the second goes on, and is told of there too
+    await stopBath(one, '2026-12-01T18:20:00Z').expect(201)
+    expect(await sheet('1')).toMatchObject({ state: 'done', standing: null, running: running.slice(1) })
+    await stopBath(two, '2026-12-01T18:20:00Z').expect(201)
+    expect(await sheet('1')).toMatchObject({ standing: { kind: 'completed' }, running: [] })
+  })
+
+  it('tells of both records of one dose that went in twice, and of the agreed time each was given under', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await house.record(number, { happenedAt: '2026-12-01T18:00:00Z' }).expect(201)
+    await house.record(number, { happenedAt: '2026-12-01T18:05:00Z' }).expect(201)
+    await house.amend(bath, number, { contactMinutes: 30 })
+    const { body } = await house.technician.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)
+    expect(body.running.map((bath: { endsAt: string }) => bath.endsAt)).toEqual([
+      '2026-12-01T18:45:00.000Z',
+      '2026-12-01T18:50:00.000Z',
+    ])
   })
 })
 

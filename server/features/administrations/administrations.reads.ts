@@ -24,6 +24,8 @@ export interface DoseReadRow {
   amount_entered_unit: string | null
   lot_number: string | null
   note: string | null
+  /** Contact time of the version it was given under; null where the agent stays in the water. */
+  contact_minutes: number | null
   exceptions_text: string
   happened_at: Date
   recorded_at: Date
@@ -71,7 +73,7 @@ export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
 /** The same of several orders at once; each row says whose it is. */
 export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseReadRow[]> {
   return db.query(
-    `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note,
+    `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, v.contact_minutes,
             d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,

@@ -21,6 +21,7 @@ import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
 import { presentRecord, storedText } from './present-record.ts'
+import { runningBaths } from './running-baths.ts'
 import { aloneOf, firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 import { findingOf } from './signed-overrides.ts'
@@ -333,6 +334,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     recorded: [...own, ...struck.filter((one) => one.dose_key === planned.key)].map((record) =>
       presentRecord(record, records, { actor, zone, now, blind: hide }),
     ),
+    running: runningBaths(records),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
 }

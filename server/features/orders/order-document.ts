@@ -49,6 +49,7 @@ export function orderNotice({
   if (row.phase === 'held') return documentWords.heldNotice
   if (row.phase === 'discontinued') return orderPaper.discontinued
   if (row.phase === 'expired') return orderPaper.expired
+  if (row.phase === 'in-progress' && row.nextDueAt === null) return orderPaper.lastRuns
   return row.phase === 'completed' ? orderPaper.completed : null
 }
 

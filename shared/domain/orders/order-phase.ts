@@ -26,7 +26,8 @@ export function orderPhase(standing: OrderStanding, now: Instant): OrderPhase {
   const { signed } = standing
   if (standing.ended) return 'discontinued'
   if (!signed) return standing.stage === 'proposed' ? 'proposed' : 'draft'
-  if (signed.planned.every((dose) => signed.doneKeys.includes(dose.key))) return 'completed'
+  const isAllRecorded = signed.planned.every((dose) => signed.doneKeys.includes(dose.key))
+  if (isAllRecorded && !standing.running) return 'completed'
   if (standing.held) return 'held'
   // whoever looks sees first that animals are in a bath, however late it is for the doses that are left
   if (standing.running) return 'in-progress'

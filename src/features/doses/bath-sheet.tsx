@@ -86,7 +86,8 @@ function looksAgain(sheet: BathSheetReply | undefined, error: Error | null): boo
 export function DoseOfNow({ number }: { number: string }) {
   const query = useQuery(sheetQuery(number, '1', true))
   if (!query.data) return <NotYet number={number} query={query} />
-  const key = doseToOpen(query.data.calendar) ?? '1'
+  const { running, calendar } = query.data
+  const key = running[0]?.key ?? doseToOpen(calendar) ?? '1'
   return <Navigate to={`${paths.orderSheet(number)}?dose=${key}`} replace />
 }
 

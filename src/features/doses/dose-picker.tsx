@@ -29,6 +29,18 @@ const mostShown = 6
 export function DosePicker({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const { calendar } = sheet
   if (calendar.length < 2) return null
+  const endsAt = (key: string) => sheet.running.find((bath) => bath.key === key)?.endsAt
+  const say = (dose: Dose) => {
+    const end = dose.state === 'running' ? endsAt(dose.key) : undefined
+    // whoever looks for a bath that runs asks when it ends, not when it was planned
+    return end === undefined
+      ? words.doseLine({
+          key: dose.key,
+          at: sayMoment(dose.dueAt, zone, sheet.now),
+          state: stateWords(dose.state),
+        })
+      : words.doseRuns({ key: dose.key, end: sayMoment(end, zone, sheet.now) })
+  }
   const list = (
     <ol>
       {calendar.map((dose) => (
@@ -38,13 +50,7 @@ export function DosePicker({ sheet, zone }: { sheet: BathSheet; zone: string }) 
             aria-current={dose.key === sheet.key ? 'true' : undefined}
           >
             <StepPicture state={marks[dose.state]} />
-            <span>
-              {words.doseLine({
-                key: dose.key,
-                at: sayMoment(dose.dueAt, zone, sheet.now),
-                state: stateWords(dose.state),
-              })}
-            </span>
+            <span>{say(dose)}</span>
           </Link>
         </li>
       ))}

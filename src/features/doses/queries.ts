@@ -18,7 +18,8 @@ export const sheetQuery = (number: string, key: string, blind: boolean) =>
     staleTime: 0,
   })
 
-const runningKey = (number: string, key: string) => `running bath ${number} ${key}`
+// a sheet that was kept by a page from before `running` was told is not read
+const runningKey = (number: string, key: string) => `running baths ${number} ${key}`
 
 /**
  * A bath that runs is kept on the device: it is timed and stopped without a signal too.

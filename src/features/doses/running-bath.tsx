@@ -1,9 +1,9 @@
-import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import type { BathSheet, RecordedDose, RunningBath } from '../../../shared/contracts/doses.contract.ts'
 import { sayTime } from '../../../shared/messages/say-date.ts'
 import { timerWords as words } from '../../../shared/messages/doses-screens.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Conditions } from '../../ui/condition-row.tsx'
-import { announcement, bathTimer, clockText, durationText } from './timer-model.ts'
+import { announcement, clockText, durationText, timerOf } from './timer-model.ts'
 import type { BathTimer } from './timer-model.ts'
 import { useServerMs, useWakeLock } from './use-bath-clock.ts'
 
@@ -12,21 +12,20 @@ const bars = [0, 1, 2, 3, 4]
 
 /** The time of a running bath, large enough to read from the other side of the tank, by the server's clock. */
 export function RunningTime({
-  sheet,
-  record,
+  bath,
+  now,
   zone,
   receivedMs,
 }: {
-  sheet: BathSheet
-  record: RecordedDose
+  bath: RunningBath
+  now: string
   zone: string
   receivedMs: number
 }) {
-  const nowMs = useServerMs(sheet.now, receivedMs)
+  const nowMs = useServerMs(now, receivedMs)
   useWakeLock()
-  const minutes = sheet.contactMinutes ?? 0
-  const timer = bathTimer(record.happenedAt, minutes, nowMs)
-  const endsAt = new Date(Date.parse(record.happenedAt) + minutes * 60_000).toISOString()
+  const timer = timerOf(bath, nowMs)
+  const minutes = (timer.elapsedMs + timer.leftMs) / 60_000
   return (
     <section className="bath-run" aria-label={words.timeLeft}>
       <p className="t-label">{timer.isUp ? words.timeUp : words.timeLeft}</p>
@@ -35,7 +34,7 @@ export function RunningTime({
         {timer.isUp ? words.over({ time: clockText(timer.leftMs) }) : clockText(timer.leftMs)}
       </p>
       {timer.isUp ? <p className="t-strong text-magenta">{words.upWords}</p> : null}
-      <TimeBar timer={timer} from={sayTime(record.happenedAt, zone)} until={sayTime(endsAt, zone)} />
+      <TimeBar timer={timer} from={sayTime(bath.startedAt, zone)} until={sayTime(bath.endsAt, zone)} />
       <p className="visually-hidden" aria-live="polite">
         {announcement(timer, minutes)}
       </p>
@@ -71,15 +70,16 @@ function TimeBar({ timer, from, until }: { timer: BathTimer; from: string; until
 export function RunningSteps({
   sheet,
   record,
+  bath,
   zone,
 }: {
   sheet: BathSheet
   record: RecordedDose
+  bath: RunningBath
   zone: string
 }) {
-  const endsMs = Date.parse(record.happenedAt) + (sheet.contactMinutes ?? 0) * 60_000
   const at = (instant: string) => sayMoment(instant, zone, sheet.now)
-  const out = { at: at(new Date(endsMs).toISOString()) }
+  const out = { at: at(bath.endsAt) }
   return (
     <Conditions
       heading={record.amountText ?? sheet.drug}
@@ -94,7 +94,7 @@ export function RunningSteps({
         {
           key: 'out',
           state: 'open',
-          what: endsMs < Date.parse(sheet.now) ? words.outNow(out) : words.outBy(out),
+          what: Date.parse(bath.endsAt) < Date.parse(sheet.now) ? words.outNow(out) : words.outBy(out),
         },
       ]}
     />

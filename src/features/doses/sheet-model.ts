@@ -1,4 +1,4 @@
-import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import type { BathSheet, RecordedDose, RunningBath } from '../../../shared/contracts/doses.contract.ts'
 import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 
 /** Which part of the sheet somebody came for, from the address. */
@@ -52,6 +52,32 @@ export function openRecord(sheet: BathSheet): RecordedDose | null {
       .filter(wentIn)
       .find(({ stop, struck }) => stop === null && struck === null) ?? null
   )
+}
+
+/** The bath that a sheet times: of its own dose, of two records the one to end first. */
+export function ownBath({ key, running }: Pick<BathSheet, 'key' | 'running'>): RunningBath | null {
+  return running.find((bath) => bath.key === key) ?? null
+}
+
+/** A record that runs by the version in force and not by the one it was given under, which planned no time for it. */
+export function bathOf(
+  record: RecordedDose,
+  { contactMinutes }: Pick<BathSheet, 'contactMinutes'>,
+): RunningBath {
+  const endsMs = Date.parse(record.happenedAt) + (contactMinutes ?? 0) * 60_000
+  return {
+    doseId: record.id,
+    key: record.key,
+    startedAt: record.happenedAt,
+    endsAt: new Date(endsMs).toISOString(),
+    by: record.by,
+  }
+}
+
+/** Every other bath of the order that runs, the first to end first. */
+export function otherBaths(sheet: Pick<BathSheet, 'key' | 'running'>): RunningBath[] {
+  const own = ownBath(sheet)
+  return sheet.running.filter((bath) => bath !== own)
 }
 
 /** Whether the two calculations are there and agree, as far as this dose needs them. */
@@ -119,7 +145,9 @@ export function restInTheWay(sheet: BathSheet): string[] {
 
 /** Whether somebody else may act on this dose at any moment: a second person who calculates, whoever stops the bath. */
 export function othersMayAct(sheet: BathSheet): boolean {
-  return sheet.state === 'running' || (sheet.state === 'due' && sheet.first !== null)
+  return (
+    sheet.state === 'running' || sheet.running.length > 0 || (sheet.state === 'due' && sheet.first !== null)
+  )
 }
 
 /** Whether somebody who would calculate second waits for the first: the blind sheet looks again by itself. */

@@ -53,6 +53,9 @@ export function Standing({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   )
 }
 
+const isToCome = (state: BathSheet['calendar'][number]['state']) =>
+  state === 'coming' || state === 'due' || state === 'late'
+
 /** What goes into which water, for how long and how; no amount. */
 export function WhatGoesIn({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const at = (instant: string) => sayMoment(instant, zone, sheet.now)
@@ -71,7 +74,7 @@ export function WhatGoesIn({ sheet, zone }: { sheet: BathSheet; zone: string }) 
           ...(own
             ? [
                 [
-                  words.due,
+                  isToCome(own.state) ? words.due : words.planned,
                   words.dueText({ at: at(own.dueAt), from: at(own.opensAt), until: at(own.latestAt) }),
                 ] as const,
               ]

@@ -32,6 +32,14 @@ export function bathTimer(startedAt: string, contactMinutes: number, atMs: numbe
   return { elapsedMs, leftMs, isUp: leftMs <= 0, share: Math.min(1, elapsedMs / wholeMs) }
 }
 
+/** The same of a bath with its own start and end. */
+export function timerOf(
+  { startedAt, endsAt }: { startedAt: string; endsAt: string },
+  atMs: number,
+): BathTimer {
+  return bathTimer(startedAt, (Date.parse(endsAt) - Date.parse(startedAt)) / minute, atMs)
+}
+
 const two = (value: number) => String(value).padStart(2, '0')
 
 /** "21:18", "3:59:10"; rounded up while time is left, so that 0:00 is shown only when it is up. */

@@ -22,7 +22,17 @@ import { PrintLink } from './print-link.tsx'
 import { RecordDialog } from './record-dialog.tsx'
 import { RecordedDoses } from './recorded-doses.tsx'
 import { RunningSteps, RunningTime } from './running-bath.tsx'
-import { lotToOpen, nextAct, openRecord, openSteps, restInTheWay } from './sheet-model.ts'
+import { OtherBaths } from './other-baths.tsx'
+import {
+  bathOf,
+  lotToOpen,
+  nextAct,
+  openRecord,
+  openSteps,
+  otherBaths,
+  ownBath,
+  restInTheWay,
+} from './sheet-model.ts'
 import type { NextAct } from './sheet-model.ts'
 import { Amounts, CautionsNow, SignedOverrides, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'
@@ -35,6 +45,8 @@ import type { StopKind } from './stop-dialog.tsx'
 interface Front {
   what: StopKind | 'hold' | 'record'
   now: string
+  /** The dose that is ended, of several that run. */
+  doseId?: string
 }
 
 /** The sheet with its amounts: conditions, calculations, giving, the running bath, what was recorded. */
@@ -56,11 +68,19 @@ export function WholeSheet({
   const [chosenLot, setChosenLot] = useState<string | null>(null)
   const lotId = chosenLot ?? lotToOpen(sheet)
   const act = nextAct(sheet)
-  const record = openRecord(sheet)
+  const bath = ownBath(sheet)
+  const record = sheet.recorded.find(({ id }) => id === bath?.doseId) ?? openRecord(sheet)
   const running = act === 'running' && record !== null
+  const others = otherBaths(sheet)
+  const timed = bath ?? (running ? bathOf(record, sheet) : null)
   const keptWords = running ? words.keptSheet : words.keptOther
-  const ask = (what: Front['what']) =>
-    setFront({ what, now: new Date(Date.now() + serverOffsetMs(sheet.now, receivedMs)).toISOString() })
+  const ask = (what: Front['what'], doseId?: string) =>
+    setFront({
+      what,
+      now: new Date(Date.now() + serverOffsetMs(sheet.now, receivedMs)).toISOString(),
+      ...(doseId === undefined ? {} : { doseId }),
+    })
+  const ends = front && (sheet.recorded.find(({ id }) => id === front.doseId) ?? record)
   const isFootEmpty = (act === 'done' || act === 'closed') && !mayHold(sheet)
   const open = act === 'calculate' || act === 'wait-for-second' || act === 'resolve' || act === 'give'
   return (
@@ -76,8 +96,8 @@ export function WholeSheet({
           </>
         }
         banner={
-          running ? (
-            <RunningTime sheet={sheet} record={record} zone={zone} receivedMs={receivedMs} />
+          running && timed ? (
+            <RunningTime bath={timed} now={sheet.now} zone={zone} receivedMs={receivedMs} />
           ) : undefined
         }
         foot={
@@ -98,6 +118,17 @@ export function WholeSheet({
         ) : null}
         <UnsentActs number={sheet.number} doseId={record?.id ?? null} zone={zone} now={sheet.now} />
         <Standing sheet={sheet} zone={zone} />
+        {others.length > 0 ? (
+          <OtherBaths
+            number={sheet.number}
+            ownKey={sheet.key}
+            baths={others}
+            now={sheet.now}
+            zone={zone}
+            receivedMs={receivedMs}
+            onEnd={sheet.may.includes('bath.stop') ? (kind, other) => ask(kind, other.doseId) : null}
+          />
+        ) : null}
         {act === 'in-the-water' ? (
           <section className="sheet-standing">
             <h2 className="t-head">{timerWords.inWater}</h2>
@@ -106,7 +137,7 @@ export function WholeSheet({
         ) : null}
         {running ? null : <DosePicker sheet={sheet} zone={zone} />}
         {act === 'done' ? null : <StopCriteria sheet={sheet} />}
-        {running ? <RunningSteps sheet={sheet} record={record} zone={zone} /> : null}
+        {running && timed ? <RunningSteps sheet={sheet} record={record} bath={timed} zone={zone} /> : null}
         <WhatGoesIn sheet={sheet} zone={zone} />
         {open ? (
           <>
@@ -137,11 +168,11 @@ export function WholeSheet({
       {front?.what === 'record' ? (
         <RecordDialog sheet={sheet} now={front.now} onBack={() => setFront(null)} />
       ) : null}
-      {front && front.what !== 'hold' && front.what !== 'record' && record ? (
+      {front && front.what !== 'hold' && front.what !== 'record' && ends ? (
         <StopDialog
-          doseId={record.id}
+          doseId={ends.id}
           label={sheet.enclosureCode}
-          startedAt={record.happenedAt}
+          startedAt={ends.happenedAt}
           kind={front.what}
           now={front.now}
           onBack={() => setFront(null)}

@@ -13,8 +13,10 @@ import {
   lotToOpen,
   nextAct,
   openSteps,
+  otherBaths,
   othersMayAct,
   otherCautions,
+  ownBath,
   restInTheWay,
   sheetMode,
   waitsForOthers,
@@ -53,6 +55,13 @@ const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
   otherStops: [],
   stop: null,
   ...given,
+})
+const running = (doseId: string, key: string, endsAt = now) => ({
+  doseId,
+  key,
+  startedAt: now,
+  endsAt,
+  by: 'A',
 })
 
 const ended = {
@@ -107,6 +116,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   mayStart: false,
   why: ['x'],
   recorded: [],
+  running: [],
   may: ['dose.give', 'dose.calculate-second'],
   ...given,
 })
@@ -217,6 +227,18 @@ describe('what the sheet shows once', () => {
     expect(openSteps(sheet({ steps: [{ ...step, overridden: true }] }))).toEqual([])
     expect(otherCautions(one).map(({ ruleId }) => ruleId)).toEqual(['R42'])
     expect(restInTheWay(one)).toEqual(['The order is held.'])
+  })
+  it('has its own time for the bath that is to end first, and tells of every other one', () => {
+    const two = sheet({
+      state: 'running',
+      recorded: [record({ id: 'd1' }), record({ id: 'd3' })],
+      running: [running('d2', '2'), running('d1', '1'), running('d3', '1')],
+    })
+    expect(ownBath(two)?.doseId).toBe('d1')
+    expect(otherBaths(two).map(({ doseId }) => doseId)).toEqual(['d2', 'd3'])
+    const done = sheet({ state: 'done', running: [running('d2', '2')] })
+    expect(ownBath(done)).toBeNull()
+    expect(otherBaths(done)).toHaveLength(1)
   })
   it('opens the dose that runs, else the late one, the due one, the next', () => {
     const dose = (key: string, state: BathSheet['calendar'][number]['state']) => ({

@@ -52,6 +52,14 @@ describe('the phase of an order', () => {
     ['past the last window', signed(['1']), 69, 'expired'],
     ['past the last window while a bath runs', signed(['1'], { running: true }), 69, 'in-progress'],
     ['past it while two run', signed(['1', '2'], { running: true }), 69, 'in-progress'],
+    ['all recorded while a bath runs', signed(['1', '2', '3'], { running: true }), 20, 'in-progress'],
+    [
+      'held while the last bath runs: somebody may mean that one',
+      signed(['1', '2', '3'], { running: true, held: true }),
+      20,
+      'held',
+    ],
+    ['all done, though it was held before', signed(['1', '2', '3'], { held: true }), 20, 'completed'],
     ['held while a bath runs', signed(['1'], { running: true, held: true }), 69, 'held'],
     ['held', signed(['1'], { held: true }), 20, 'held'],
     [
