@@ -19,6 +19,7 @@ import { DoseOverrides1764600000033 } from './0033-dose-overrides.ts'
 import { EndsThatCount1764600000034 } from './0034-ends-that-count.ts'
 import { MarksByKey1764600000035 } from './0035-marks-by-key.ts'
 import { AmountsPreviewed1764600000036 } from './0036-amounts-previewed.ts'
+import { RowsAsWritten1764600000037 } from './0037-rows-as-written.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -44,4 +45,5 @@ export const migrations = [
   EndsThatCount1764600000034,
   MarksByKey1764600000035,
   AmountsPreviewed1764600000036,
+  RowsAsWritten1764600000037,
 ]

@@ -38,6 +38,9 @@ export const Product = z.object({
   strengthBasis: Basis.describe('What the strength is a strength of'),
   densityGPerMl: z.number().nullable().describe('Density in g/mL, where known'),
   inUse: z.boolean().describe('Offered when an order is written'),
+  record: z
+    .enum(['intact', 'broken'])
+    .describe('Whether it is what was entered; of a broken one no figure is to be used'),
   version: z.int().describe('Version for saving'),
   lots: z.array(Lot).describe('Lots, the first to expire first'),
 })

@@ -235,6 +235,7 @@ export const signOrder = contract({
     'password-wrong',
     'sign-in-locked',
     'order-incomplete',
+    'not-as-entered',
     'bad-input',
     'dose-line-not-usable',
     'caution-stops',

@@ -36,6 +36,7 @@ export const problemStatus = {
   'file-too-large': 422,
   'file-type-not-allowed': 422,
   'broken-record': 409,
+  'not-as-entered': 409,
   'already-confirmed': 409,
   'volume-differs': 409,
   'another-person-needed': 403,

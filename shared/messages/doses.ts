@@ -21,6 +21,7 @@ export const doseWords = defineMessages({
   held: 'The order is held. A veterinarian lifts the hold.',
   ended: 'The order has ended.',
   alreadyRecorded: 'This dose is recorded already.',
+  figuresChanged: 'A figure of this dose is not what was entered',
   noAmount: 'The amount cannot be worked out for the water as it is now.',
   driftOutside: (p: { percent: string; allowed: string }) =>
     `The volume has moved by ${p.percent} since the signature; the order allows ${p.allowed}. A veterinarian amends the order.`,

@@ -50,6 +50,7 @@ export const formularyWords = defineMessages({
   products: 'Products and lots',
   product: 'Product',
   strength: 'Strength',
+  notAsEntered: 'Not what was entered: do not use it. Enter the product anew, and tell the administrator.',
   lots: 'Lots',
   noProducts: 'No product here',
   noneOfDrug: 'No product of this drug is entered.',

@@ -22,6 +22,7 @@ export const orderFormWords = defineMessages({
   problem: 'Problem treated',
   problemHint: 'What was seen, and when',
   product: 'Drug product, into the water',
+  notAsEntered: 'not what was entered',
   productText: (p: { name: string; product: string; strength: string; basis: string }) =>
     `${p.name} (${p.product}), ${p.strength} ${p.basis}`,
   notInUse: 'This product is no longer in use. Choose another.',

@@ -123,6 +123,7 @@ export const orderViewWords = defineMessages({
   sheet: 'Bath sheet',
   sheetOf: (p: { key: string }) => `Bath sheet of dose ${p.key}`,
   noDoses: 'The signed text plans no doses.',
+  notAsEntered: 'not what was entered',
 
   conditions: 'Before each dose',
   conditionsNote: 'true before the first gram',

@@ -32,6 +32,17 @@ export const orderMissing = defineMessages({
 })
 export type OrderField = keyof typeof orderMissing
 
+/** Figures that somebody changed past the program, by the table they stand in, and what to do. */
+export const figureChanged = defineMessages({
+  products:
+    'The strength of this product, or something else about it, is not what was entered. Do not use it: have it entered anew from its label, choose that one, and tell the administrator.',
+  product_lots:
+    'This lot is not what was entered. Do not use it: have it entered anew from its container, choose that one, and tell the administrator.',
+  dose_lines: 'This dose line is not what was entered. Choose another, and tell the administrator.',
+  volume_determinations:
+    'The volume of this water is not the one that was determined. Determine it anew, have it confirmed, and tell the administrator.',
+})
+
 /** Why an order is refused, and what to do. */
 export const orderProblemWords = defineMessages({
   versionGone:

@@ -102,7 +102,7 @@ describe('the next dose', () => {
     expect(await whyNot(number, '2')).not.toContain('has no end')
   })
 
-  it('waits for a veterinarian when the strength of the product was changed after the signature', async () => {
+  it('is not worked out from a product that somebody changed in the database; what went in is kept and marked', async () => {
     const powder = await aProduct(api, {})
     const number = await house.signedBath(await house.tankWithSchool(), {
       productId: powder.id,
@@ -118,7 +118,24 @@ describe('the next dose', () => {
     await owner.connect()
     await owner.query(`UPDATE products SET strength_entered_value = 9.9 WHERE id = $1`, [powder.id])
     await owner.end()
-    expect(await whyNot(number, '1')).toContain('g is worked out now and 4.36 g was signed')
+    expect(await whyNot(number, '1')).toContain('The strength of this product')
+    expect(await whyNot(number, '1')).toContain('is not what was entered')
+    const sheet = (await house.technician.agent.get(`/api/orders/${number}/doses/1`).expect(200)).body
+    expect([sheet.amountNowText, sheet.mayStart]).toEqual([null, false])
+    const first = await house.technician.agent
+      .post(house.doseAt(number, '/first-calculation'))
+      .send({ id: api.nextId(), lotId: powder.lotId })
+    expect([first.status, first.body.detail]).toEqual([
+      409,
+      expect.stringContaining('is not what was entered'),
+    ])
+    const amount = { value: '4.36', unit: 'g' }
+    expect((await house.give(number, { lotId: powder.lotId, amount })).status).toBe(409)
+    const recorded = await house.record(number, { lotId: powder.lotId, amount }).expect(201)
+    const codes = recorded.body.recorded[0].exceptions.map(({ code }: { code: string }) => code)
+    expect(codes).toContain('figures-changed')
+    // it is the amount that was signed, from the strength as it was entered
+    expect(codes).not.toContain('amount-differs')
   })
 })
 

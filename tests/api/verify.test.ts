@@ -6,9 +6,9 @@ import { verifyRows } from '../../server/platform/audit/verify-rows.ts'
 import { aFormalinHouse } from '../builders/a-bath.ts'
 import type { FormalinHouse } from '../builders/a-bath.ts'
 import { aClearableCase, clear } from '../builders/a-clearance.ts'
-import { signDraft } from '../builders/an-order.ts'
+import { aDraft, aProduct, signDraft } from '../builders/an-order.ts'
 import { textOf } from '../pdf/support/poppler.ts'
-import { startApi, testDay } from '../support/api.ts'
+import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
 let api: TestApi
@@ -143,6 +143,77 @@ describe('a kept row that another hand changed', () => {
       hold,
     ])
     expect(await found('not-by-the-program', 'order_events ')).toHaveLength(1)
+  })
+
+  it('is reported of what a dose is worked out from: a product, an enclosure, a draft; no later act hides it', async () => {
+    const bath = await house.tankWithSchool()
+    const product = await aProduct(api, {})
+    const draft = await aDraft(
+      api,
+      house.fieldsOf(bath, {
+        productId: product.id,
+        lotId: product.lotId,
+        target: { value: '2', unit: 'mg/L' },
+        basis: 'active',
+        division: { value: '0.01', unit: 'g' },
+      }),
+    )
+    const { agent } = house.technician
+    const listed = async () => {
+      const { products } = (await agent.get('/api/formulary').expect(200)).body
+      return products.find((one: { id: string }) => one.id === product.id)
+    }
+    const setUse = async (inUse: boolean) =>
+      agent
+        .put(`/api/products/${product.id}`)
+        .set('Idempotency-Key', newKey())
+        .send({ expectedVersion: (await listed()).version, inUse })
+        .expect(200)
+    await setUse(false)
+    await setUse(true)
+    expect(await found('changed', 'products ')).toEqual([])
+    expect((await listed()).record).toBe('intact')
+
+    await byHand([`UPDATE products SET strength_entered_value = 50 WHERE id = $1`, product.id])
+    const at = `products ${product.id}`
+    expect(await found('changed', at)).toMatchObject([
+      { detail: expect.stringContaining('product.set-use, Praziquantel powder') },
+    ])
+    const vet = await api.as('veterinarian')
+    const order = (await vet.agent.get(`/api/orders/${draft.number}`).expect(200)).body
+    const preview = (await vet.agent.post('/api/order-previews').send(order.draft).expect(200)).body
+    expect([preview.amount, preview.refusal.code]).toEqual([null, 'not-as-entered'])
+    const signed = await signDraft(api, draft)
+    expect([signed.status, signed.body.code]).toEqual([409, 'not-as-entered'])
+    expect(signed.body.detail).toContain('have it entered anew')
+    await setUse(false)
+    expect(await found('changed', at)).toHaveLength(1)
+    expect((await listed()).record).toBe('broken')
+
+    await byHand([`UPDATE enclosures SET air_space = 'another' WHERE id = $1`, bath.tank.id])
+    expect(await found('changed', `enclosures ${bath.tank.id}`)).toHaveLength(1)
+    await byHand([`UPDATE orders SET draft_text = replace(draft_text, '"2"', '"4"') WHERE id = $1`, draft.id])
+    expect(await found('changed', `orders ${draft.id}`)).toHaveLength(1)
+    const put = api.nextId()
+    await byHand([
+      `INSERT INTO products SELECT $2, agent, 'Put in', form, 25, strength_entered_unit, strength_basis,
+              density_g_per_ml, in_use, recorded_at, recorded_by, 1 FROM products WHERE id = $1`,
+      product.id,
+      put,
+    ])
+    expect(await found('not-by-the-program', `products ${put}`)).toHaveLength(1)
+  })
+
+  it('is no volume to sign a dose by', async () => {
+    const bath = await house.tankWithSchool()
+    const draft = await aDraft(api, house.fieldsOf(bath))
+    await byHand([
+      `UPDATE volume_determinations SET net_volume_litres = net_volume_litres * 2 WHERE id IN
+         (SELECT b.determination_id FROM volume_determination_bodies b WHERE b.water_body_id = $1)`,
+      bath.tank.waterBodyId,
+    ])
+    const signed = await signDraft(api, draft)
+    expect([signed.status, signed.body.detail]).toEqual([409, expect.stringContaining('Determine it anew')])
   })
 
   it('is reported though it bears a time before anything else was written', async () => {

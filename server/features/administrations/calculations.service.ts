@@ -65,7 +65,9 @@ export function createCalculations(parts: AdministrationsParts) {
           })
         const measured = situation.judgement?.dose?.measured
         if (!measured || !situation.judgement?.dose)
-          throw new Problem('dose-not-possible', { detail: doseWords.noAmount })
+          throw new Problem('dose-not-possible', {
+            detail: situation.changed.join(' ') || doseWords.noAmount,
+          })
         const verified = await verifyWorking(situation.judgement.dose.working)
         if (!verified.ok) throw new Problem('working-disagrees')
         const volume = situation.judgement.facts.volume.determination

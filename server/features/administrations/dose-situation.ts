@@ -46,6 +46,8 @@ export interface DoseSituation {
   product: Product | null
   /** The order worked out again by the facts of the instant; null where the water cannot be read any more. */
   judgement: OrderJudgement | null
+  /** Which figures somebody changed past the program, in words; nothing is worked out from them. */
+  changed: string[]
   answer: CautionAnswer | null
   /** What the answer was judged by; null where nothing could be. */
   facts: CautionFacts | null
@@ -204,6 +206,7 @@ export async function readDoseSituation(
     struck: all.filter((one) => !stands(one)),
     product: found?.product ?? null,
     judgement,
+    changed: found?.changed ?? [],
     facts,
     lotId,
     at: at.toISOString(),

@@ -136,7 +136,8 @@ export function obstacles(
         at: sayInstant(running.happened_at.toISOString(), situation.judgement?.facts.zone ?? 'UTC'),
       }),
     )
-  if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
+  if (situation.changed.length > 0) why.push(...situation.changed)
+  else if (!judgement?.dose?.measured) why.push(doseWords.noAmount)
   if (drift && !drift.within)
     why.push(
       doseWords.driftOutside({

@@ -126,6 +126,8 @@ export function exceptionsOf(
   if (gone.all) mark('animals-gone', 'stop', doseWords.animalsGone, doseWords.animalsGoneText({ animals }))
   else if (animals !== '')
     mark('animals-left', 'warning', doseWords.animalsLeft, doseWords.animalsLeftText({ animals }))
+  if (situation.changed.length > 0)
+    mark('figures-changed', 'stop', doseWords.figuresChanged, situation.changed.join(' '))
   if (!judgement) mark('not-judged', 'warning', doseWords.notJudged, doseWords.notJudgedText)
   if (drift && !drift.within)
     mark('volume-moved', 'warning', doseWords.volumeMoved, doseWords.volumeMovedText)

@@ -37,6 +37,7 @@ export function presentProduct(row: ProductReadRow, on: string): Product {
     strengthBasis: row.strength_basis as Product['strengthBasis'],
     densityGPerMl: row.density_g_per_ml,
     inUse: row.in_use,
+    record: row.is_as_written ? 'intact' : 'broken',
     version: row.version,
     lots: row.lots.map((lot) => ({
       id: lot.id,

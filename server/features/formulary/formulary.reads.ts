@@ -54,6 +54,7 @@ export interface ProductReadRow {
   density_g_per_ml: number | null
   in_use: boolean
   version: number
+  is_as_written: boolean
   lots: LotReadRow[]
 }
 
@@ -87,6 +88,7 @@ export function readProducts(db: Db, id?: string): Promise<ProductReadRow[]> {
   return db.query(
     `SELECT p.id, p.agent, p.product_name, p.form, p.strength_entered_value, p.strength_entered_unit,
             p.strength_basis, p.density_g_per_ml, p.in_use, p.version,
+            row_is_as_written('products', p.id::text) AS is_as_written,
             coalesce((SELECT json_agg(json_build_object(
                                'id', t.id, 'lot_number', t.lot_number, 'expires_on', t.expires_on,
                                'received_on', t.received_on,

@@ -11,8 +11,9 @@ import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
-import { orderMissing, orderProblemWords } from '../../../shared/messages/orders.ts'
+import { figureChanged, orderMissing, orderProblemWords } from '../../../shared/messages/orders.ts'
 import type { OrderField } from '../../../shared/messages/orders.ts'
+import { readChangedTables } from '../../platform/audit/changed-rows.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { readGivenBefore } from './agent-history.reads.ts'
@@ -33,6 +34,8 @@ export interface OrderSituation {
   product: Product | null
   line: DoseLine | null
   judgement: OrderJudgement | null
+  /** Which figures somebody changed past the program, in words; nothing is worked out from them. */
+  changed: string[]
 }
 
 const nothingTyped: Quantity = { value: '', unit: 'mg/L' }
@@ -146,6 +149,23 @@ export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields
   await refuseDoseLine(parts, fields)
 }
 
+/** Which of the figures that an amount is worked out from are not what was entered, in words. */
+async function readChangedFigures(
+  db: Db,
+  fields: BathOrderFields,
+  { water }: BathSituation,
+): Promise<string[]> {
+  const used = [
+    ['products', fields.productId],
+    ['product_lots', fields.lotId],
+    ['dose_lines', fields.doseLineId],
+    ['volume_determinations', water.volume?.id ?? null],
+  ] as const
+  const rows = used.flatMap(([table, key]) => (key === null ? [] : [[table, key] as const]))
+  const changed = await readChangedTables(db, rows)
+  return used.filter(([table]) => changed.includes(table)).map(([table]) => figureChanged[table])
+}
+
 /** Reads the facts of an instant and judges the order by them: the one way, while writing, at signing and at the dose. */
 export async function readSituation(
   parts: SituationParts,
@@ -160,17 +180,19 @@ export async function readSituation(
     bring: options.stage === 'start' ? [] : fields.animalIds,
   })
   if (!situation) throw noWaterProblem()
+  const changed = await readChangedFigures(options.db ?? parts.dataSource, fields, situation)
   const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
-  const judgement = product
-    ? judgeBathOrder(
-        situation.base,
-        draftOf(fields, given),
-        chosenOf(product, line, await parts.doseLinesOf(product.agent), fields.lotId),
-        {},
-        options.stage,
-      )
-    : null
-  return { situation, product, line, judgement }
+  const judgement =
+    product && changed.length === 0
+      ? judgeBathOrder(
+          situation.base,
+          draftOf(fields, given),
+          chosenOf(product, line, await parts.doseLinesOf(product.agent), fields.lotId),
+          {},
+          options.stage,
+        )
+      : null
+  return { situation, product, line, judgement, changed }
 }
 
 /** Fields that have to be filled before the order can be signed. */

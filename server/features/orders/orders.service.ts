@@ -204,6 +204,7 @@ export function createOrdersService(parts: OrdersParts) {
         if (missing.length > 0) throw missingProblem(missing)
         await refuseUnfit(parts, fields, parts.clock.now())
         const found = await readSituation(parts, fields, tx.at, { db: tx.manager, exceptOrderId: order.id })
+        if (found.changed.length > 0) throw new Problem('not-as-entered', { detail: found.changed.join(' ') })
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
         const volume = situation.water.volume

@@ -56,6 +56,8 @@ export function saidWater(water: WaterFacts, animals: readonly AnimalFacts[], tr
 
 /** Why there is no amount, and what to do about it. */
 function saidRefusal(found: OrderSituation): OrderPreview['refusal'] {
+  if (found.changed.length > 0)
+    return { code: 'not-as-entered', field: null, detail: found.changed.join(' ') }
   const refusal = found.judgement?.refusal
   if (!refusal) return null
   const { code, field = null } = refusal

@@ -1,6 +1,7 @@
 import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import { insertOnce, updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
+import { noteChange } from '../../platform/database/written-rows.ts'
 import { LicenceRecord, LicenceVoid, Person, PersonRole } from './person.entity.ts'
 
 export function insertPerson(tx: Tx, row: Person): Promise<{ created: boolean }> {
@@ -50,11 +51,17 @@ export async function grantRole(tx: Tx, row: PersonRole): Promise<void> {
 }
 
 export async function withdrawRole(tx: Tx, personId: string, role: Role): Promise<void> {
-  await tx.manager.query(
-    `UPDATE person_roles SET withdrawn_at = $3, withdrawn_by = $4
-      WHERE person_id = $1 AND role = $2 AND withdrawn_at IS NULL`,
-    [personId, role, tx.at, tx.actor.personId],
+  const [held]: { id: string }[] = await tx.manager.query(
+    `SELECT r.id FROM person_roles r WHERE r.person_id = $1 AND r.role = $2 AND r.withdrawn_at IS NULL FOR UPDATE`,
+    [personId, role],
   )
+  if (!held) return
+  await noteChange(tx.manager, 'person_roles', held.id)
+  await tx.manager.query(`UPDATE person_roles SET withdrawn_at = $2, withdrawn_by = $3 WHERE id = $1`, [
+    held.id,
+    tx.at,
+    tx.actor.personId,
+  ])
 }
 
 /** How many other people can still administer; their rows are locked, so that two cannot remove each other. */

@@ -16,6 +16,11 @@ export interface AuditDraft {
   clinical?: boolean
 }
 
+/** A draft with the marks of the rows that its act wrote. */
+export interface AuditEntry extends AuditDraft {
+  rows?: RowMarks | undefined
+}
+
 /** Key of the advisory lock that puts the entries of all transactions in one line. */
 export const chainLock = 4400_0001
 export const chainStart = '0'.repeat(64)
@@ -28,7 +33,7 @@ export function chainHash(previousHash: string, text: string): string {
 /** Appends the entries of a transaction; the last thing it does, so that the lock is held for milliseconds. */
 export async function appendToChain(
   manager: EntityManager,
-  change: { context: RequestContext; at: Date; entries: readonly AuditDraft[]; rows?: RowMarks | null },
+  change: { context: RequestContext; at: Date; entries: readonly AuditEntry[] },
 ): Promise<void> {
   if (change.entries.length === 0) return
   await manager.query('SELECT pg_advisory_xact_lock($1)', [chainLock])
@@ -37,7 +42,6 @@ export async function appendToChain(
   )
   let seq = Number(last?.seq ?? 0)
   let previousHash = last?.hash ?? chainStart
-  const lastEntry = change.entries.at(-1)
   for (const entry of change.entries) {
     seq += 1
     const { actor, requestId } = change.context
@@ -51,8 +55,7 @@ export async function appendToChain(
       after: entry.after,
       clinical: entry.clinical ?? false,
       requestId,
-      // the rows of the whole transaction stand with its last entry
-      rows: entry === lastEntry ? (change.rows ?? undefined) : undefined,
+      rows: entry.rows,
     })
     const hash = chainHash(previousHash, text)
     await manager.query(

@@ -1,6 +1,6 @@
 import type { EntityManager } from 'typeorm'
 import type { Db } from '../database/db.ts'
-import { writtenBy } from '../database/written-rows.ts'
+import type { Written } from '../database/written-rows.ts'
 
 /** Table → text of the primary key → hash over the row as it was written. */
 export type RowMarks = Record<string, Record<string, string>>
@@ -19,11 +19,23 @@ export async function readMarks(
 }
 
 /**
- * The marks of everything that a transaction wrote into append-only tables. They go into the audit trail with the act
- * itself: a row that is changed, taken away or put in later, by whatever hand, differs from them.
+ * The marks of what each act of a transaction wrote, as it stands at the end of it. They go into the audit trail with the
+ * act itself: a row that is changed, taken away or put in later, by whatever hand, differs from them.
  */
-export async function marksOfWritten(manager: EntityManager): Promise<RowMarks | null> {
-  const marks: RowMarks = {}
-  for (const [table, keys] of writtenBy(manager)) marks[table] = await readMarks(manager, table, [...keys])
-  return Object.keys(marks).length === 0 ? null : marks
+export async function marksOfWritten(
+  manager: EntityManager,
+  acts: readonly Written[],
+): Promise<(RowMarks | undefined)[]> {
+  const all: RowMarks = {}
+  for (const table of new Set(acts.flatMap((written) => [...written.keys()]))) {
+    const keys = new Set(acts.flatMap((written) => [...(written.get(table) ?? [])]))
+    all[table] = await readMarks(manager, table, [...keys])
+  }
+  const marksOf = (table: string, keys: ReadonlySet<string>) =>
+    Object.fromEntries(Object.entries(all[table] ?? {}).filter(([key]) => keys.has(key)))
+  return acts.map((written) =>
+    written.size === 0
+      ? undefined
+      : Object.fromEntries([...written].map(([table, keys]) => [table, marksOf(table, keys)])),
+  )
 }

@@ -1,14 +1,14 @@
 import type { DataSource } from 'typeorm'
-import { keptTables, readKeptTables } from './kept-tables.ts'
+import { isMarked, isMarkedDraft, keptTables, markedDrafts, readTables } from './marked-tables.ts'
 import { readMarks } from './row-marks.ts'
 import type { RowMarks } from './row-marks.ts'
 
-/** A row of an append-only table that is not what the audit trail saw written. */
+/** A row that is not what the audit trail saw written. */
 export interface RowFault {
   /** Table and primary key of the row. */
   at: string
   what: 'changed' | 'missing' | 'not-by-the-program'
-  /** The act that wrote it, where the trail has one. */
+  /** The act that wrote it last, where the trail has one. */
   detail: string
 }
 
@@ -45,13 +45,28 @@ function marksIn(text: string): RowMarks {
   }
 }
 
+/** Those of a table's rows that are not as marked. */
+async function compareWithMarks(
+  db: DataSource,
+  table: string,
+  wanted: readonly Wanted[],
+): Promise<RowFault[]> {
+  const ids = wanted.map(({ id }) => id)
+  const now = isMarked(table) ? await readMarks(db, table, ids) : {}
+  return wanted
+    .filter(({ id, mark }) => now[id] !== mark)
+    .map(({ id, by }) => ({ at: `${table} ${id}`, what: now[id] ? 'changed' : 'missing', detail: by }))
+}
+
 /**
- * Compares every row of every append-only table with the audit entry of the act that wrote it: changed since, gone, or
+ * Compares every row of every marked table with the audit entry of the act that wrote it last: changed since, gone, or
  * put in by another hand, whatever time it bears.
  */
 export async function verifyRows(dataSource: DataSource, pageSize = 2000): Promise<RowReport> {
   const faults: RowFault[] = []
   const marked = new Map<string, Set<string>>()
+  /** Of rows that may change, the newest mark of each. */
+  const newest = new Map<string, Map<string, Wanted>>()
   let rows = 0
   for (let seq = 0; ;) {
     const entries: Entry[] = await dataSource.query(
@@ -66,26 +81,23 @@ export async function verifyRows(dataSource: DataSource, pageSize = 2000): Promi
         for (const [id, mark] of Object.entries(marks)) listIn(page, table).push({ id, mark, by })
       }
     for (const [table, wanted] of page) {
-      const isKnown = keptTables.includes(table)
-      const now = isKnown
-        ? await readMarks(
-            dataSource,
-            table,
-            wanted.map(({ id }) => id),
-          )
-        : {}
       const ids = marked.get(table) ?? new Set<string>()
       marked.set(table, ids)
-      for (const { id, mark, by } of wanted) {
+      for (const { id } of wanted) {
         if (!ids.has(id)) rows += 1
         ids.add(id)
-        if (now[id] !== mark)
-          faults.push({ at: `${table} ${id}`, what: now[id] ? 'changed' : 'missing', detail: by })
       }
+      if (isMarkedDraft(table)) {
+        const last = newest.get(table) ?? new Map<string, Wanted>()
+        newest.set(table, last)
+        for (const one of wanted) last.set(one.id, one)
+      } else faults.push(...(await compareWithMarks(dataSource, table, wanted)))
     }
     if (entries.length < pageSize) break
     seq = Number(entries.at(-1)?.seq)
   }
+  for (const [table, last] of newest)
+    faults.push(...(await compareWithMarks(dataSource, table, [...last.values()])))
   faults.push(...(await findStrangers(dataSource, marked)))
   return { rows, faults }
 }
@@ -96,7 +108,7 @@ async function findStrangers(
   marked: ReadonlyMap<string, ReadonlySet<string>>,
 ): Promise<RowFault[]> {
   const faults: RowFault[] = []
-  for (const { table, keySql } of await readKeptTables(dataSource)) {
+  for (const { table, keySql } of await readTables(dataSource, [...keptTables, ...markedDrafts])) {
     const rows: { key: string }[] = await dataSource.query(`SELECT ${keySql} AS key FROM ${table} t`)
     for (const { key } of rows)
       if (!marked.get(table)?.has(key))

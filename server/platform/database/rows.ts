@@ -3,6 +3,7 @@ import type { EntityTarget, ObjectLiteral } from 'typeorm'
 import { idAlreadyUsed } from './id-already-used.ts'
 import { Problem } from '../http/problem.ts'
 import type { Tx } from './transactions.ts'
+import { noteChange } from './written-rows.ts'
 
 /**
  * Changes a draft only if it still has the version that was read. TypeORM's own version column does not refuse a
@@ -14,6 +15,7 @@ export async function updateVersioned<T extends ObjectLiteral & { id: string; ve
   key: { id: string; version: number },
   patch: Partial<T>,
 ): Promise<void> {
+  await noteChange(tx.manager, tx.manager.connection.getMetadata(target).tableName, key.id)
   const done = await tx.manager
     .createQueryBuilder()
     .update(target)

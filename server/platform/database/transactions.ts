@@ -7,6 +7,8 @@ import type { Clock } from '../clock.ts'
 import { appendToChain } from '../audit/append-to-chain.ts'
 import type { AuditDraft } from '../audit/append-to-chain.ts'
 import { marksOfWritten } from '../audit/row-marks.ts'
+import { takeWritten } from './written-rows.ts'
+import type { Written } from './written-rows.ts'
 import { idAlreadyUsed } from './id-already-used.ts'
 import { problemFromConstraint } from './constraint-problems.ts'
 
@@ -70,6 +72,23 @@ async function claimRecord(manager: EntityManager, context: RequestContext, at: 
   if (earlier?.content_hash !== record.contentHash) throw idAlreadyUsed()
 }
 
+/** An act, and what was written since the one before it. */
+interface Act {
+  entry: AuditDraft
+  written: Written
+}
+
+/** What was written after the last act belongs to it; with none at all, the marks of the rows would be lost. */
+function withRest(acts: readonly Act[], rest: Written): Act[] {
+  if (rest.size === 0) return [...acts]
+  const last = acts.at(-1)
+  if (!last)
+    throw new Error(`Rows were written without an act in the audit trail: ${[...rest.keys()].join(', ')}`)
+  const written = new Map(last.written)
+  for (const [table, keys] of rest) written.set(table, new Set([...(written.get(table) ?? []), ...keys]))
+  return [...acts.slice(0, -1), { ...last, written }]
+}
+
 class Replayed extends Error {
   constructor(readonly result: Json | null) {
     super('replayed')
@@ -108,7 +127,7 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
   async function once<T extends Json | void>(context: RequestContext, work: (tx: Tx) => Promise<T>) {
     const runner = parts.dataSource.createQueryRunner()
     const later: (() => Promise<void> | void)[] = []
-    const entries: AuditDraft[] = []
+    const acts: Act[] = []
     await runner.connect()
     try {
       await runner.startTransaction('READ COMMITTED')
@@ -123,7 +142,7 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
         context,
         actor: context.actor,
         at,
-        audit: (entry: AuditDraft) => void entries.push(entry),
+        audit: (entry: AuditDraft) => void acts.push({ entry, written: takeWritten(manager) }),
         afterCommit: (next: () => Promise<void> | void) => void later.push(next),
       } as unknown as Tx
       const result = await work(tx)
@@ -133,8 +152,13 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
           context.actor.personId,
           result === undefined ? null : JSON.stringify(result),
         ])
-      const rows = await marksOfWritten(manager)
-      await appendToChain(manager, { context, at, entries, rows })
+      const told = withRest(acts, takeWritten(manager))
+      const marks = await marksOfWritten(
+        manager,
+        told.map(({ written }) => written),
+      )
+      const entries = told.map(({ entry }, i) => ({ ...entry, rows: marks[i] }))
+      await appendToChain(manager, { context, at, entries })
       await runner.commitTransaction()
       return { result, later }
     } catch (error) {

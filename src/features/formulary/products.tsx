@@ -37,17 +37,20 @@ export function Products({ products, zone }: { products: readonly Product[]; zon
     {
       id: 'strength',
       heading: words.strength,
-      cell: (product) => (
-        <>
-          <b data-quantity="dose">{strengthOf(product.strength)}</b>
-          <span className="block">{basisNames[product.strengthBasis]}</span>
-          {product.densityGPerMl === null ? null : (
-            <span className="t-note block">
-              {words.density({ density: formatDose(product.densityGPerMl, 'g/mL').text })}
-            </span>
-          )}
-        </>
-      ),
+      cell: (product) =>
+        product.record === 'broken' ? (
+          <b>{words.notAsEntered}</b>
+        ) : (
+          <>
+            <b data-quantity="dose">{strengthOf(product.strength)}</b>
+            <span className="block">{basisNames[product.strengthBasis]}</span>
+            {product.densityGPerMl === null ? null : (
+              <span className="t-note block">
+                {words.density({ density: formatDose(product.densityGPerMl, 'g/mL').text })}
+              </span>
+            )}
+          </>
+        ),
     },
     {
       id: 'lots',

@@ -96,7 +96,13 @@ export function DraftFacts({ fields, zone }: { fields: BathOrderFields; zone: st
             <>
               {product.productName}
               {', '}
-              <DoseText text={doseOfEntered(product.strength)} /> {basisNames[product.strengthBasis]}
+              {product.record === 'broken' ? (
+                words.notAsEntered
+              ) : (
+                <>
+                  <DoseText text={doseOfEntered(product.strength)} /> {basisNames[product.strengthBasis]}
+                </>
+              )}
             </>
           ) : (
             open

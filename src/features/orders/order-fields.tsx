@@ -5,6 +5,7 @@ import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { agentNames, basisNames, waterKinds } from '../../../shared/messages/formulary.ts'
 import { lotStateNames } from '../../../shared/messages/formulary-screens.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
+import { figureChanged } from '../../../shared/messages/orders.ts'
 import { sayDate } from '../../../shared/messages/say-date.ts'
 import { Button } from '../../ui/button.tsx'
 import { Combobox } from '../../ui/combobox.tsx'
@@ -24,11 +25,15 @@ export interface FieldsProps {
   wrong: (name: keyof OrderValues) => string | undefined
 }
 
+/** The strength on the label; of a product that somebody changed past the program no figure is shown. */
+const strengthText = (product: Product) =>
+  product.record === 'broken' ? words.notAsEntered : doseOfEntered(product.strength)
+
 const productText = (product: Product) =>
   words.productText({
     name: agentNames[product.agent],
     product: product.productName,
-    strength: doseOfEntered(product.strength),
+    strength: strengthText(product),
     basis: basisNames[product.strengthBasis],
   })
 
@@ -75,15 +80,21 @@ export function OrderFields({
         id="productId"
         label={words.product}
         options={products
-          .filter((one) => one.inUse || one.id === values.productId)
+          .filter((one) => (one.inUse && one.record === 'intact') || one.id === values.productId)
           .map((one) => ({
             value: one.id,
             name: agentNames[one.agent],
-            detail: `${one.productName}, ${doseOfEntered(one.strength)}`,
+            detail: `${one.productName}, ${strengthText(one)}`,
           }))}
         value={values.productId}
         hint={product ? productText(product) : undefined}
-        wrong={product?.inUse === false ? words.notInUse : wrong('productId')}
+        wrong={
+          product?.record === 'broken'
+            ? figureChanged.products
+            : product?.inUse === false
+              ? words.notInUse
+              : wrong('productId')
+        }
         onChange={(productId) => onChange({ productId, lotId: null, doseLineId: null })}
       />
       {product ? (
