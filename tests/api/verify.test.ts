@@ -208,7 +208,7 @@ describe('a kept row that another hand changed', () => {
     const bath = await house.tankWithSchool()
     const draft = await aDraft(api, house.fieldsOf(bath))
     await byHand([
-      `UPDATE volume_determinations SET net_volume_litres = net_volume_litres * 2 WHERE id IN
+      `UPDATE volume_determinations SET net_volume_litres = net_volume_litres * 0.5 WHERE id IN
          (SELECT b.determination_id FROM volume_determination_bodies b WHERE b.water_body_id = $1)`,
       bath.tank.waterBodyId,
     ])

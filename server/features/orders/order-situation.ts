@@ -153,11 +153,12 @@ export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields
 async function readChangedFigures(
   db: Db,
   fields: BathOrderFields,
-  { water }: BathSituation,
+  { product, water }: { product: Product | null; water: BathSituation['water'] },
 ): Promise<string[]> {
   const used = [
     ['products', fields.productId],
-    ['product_lots', fields.lotId],
+    // a lot that is not of this product is refused for that
+    ['product_lots', product?.lots.find(({ id }) => id === fields.lotId)?.id ?? null],
     ['dose_lines', fields.doseLineId],
     ['volume_determinations', water.volume?.id ?? null],
   ] as const
@@ -180,7 +181,10 @@ export async function readSituation(
     bring: options.stage === 'start' ? [] : fields.animalIds,
   })
   if (!situation) throw noWaterProblem()
-  const changed = await readChangedFigures(options.db ?? parts.dataSource, fields, situation)
+  const changed = await readChangedFigures(options.db ?? parts.dataSource, fields, {
+    product,
+    water: situation.water,
+  })
   const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
   const judgement =
     product && changed.length === 0
