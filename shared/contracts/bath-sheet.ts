@@ -55,6 +55,9 @@ export const RecordedDose = z.object({
   kind: z
     .enum(['given', 'recorded', 'withheld', 'refused'])
     .describe('Given under the conditions, or recorded as a fact'),
+  record: z
+    .enum(['intact', 'broken'])
+    .describe('Whether it is what was recorded; of a broken one no figure is shown'),
   amountText: z.string().nullable().describe('What was given'),
   lotNumber: z.string().nullable().describe('Lot'),
   happenedAt: Instant,

@@ -22,6 +22,9 @@ export const doseWords = defineMessages({
   ended: 'The order has ended.',
   alreadyRecorded: 'This dose is recorded already.',
   figuresChanged: 'A figure of this dose is not what was entered',
+  notAsRecorded: 'Not what was recorded',
+  notAsRecordedText:
+    'Somebody changed this record in the database. Go by nothing in it: ask whoever gave the dose, and tell the administrator.',
   noAmount: 'The amount cannot be worked out for the water as it is now.',
   driftOutside: (p: { percent: string; allowed: string }) =>
     `The volume has moved by ${p.percent} since the signature; the order allows ${p.allowed}. A veterinarian amends the order.`,

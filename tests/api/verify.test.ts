@@ -116,7 +116,8 @@ describe('a kept row that another hand changed', () => {
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)
     const dose = api.nextId()
-    await house.record(number, { id: dose }).expect(201)
+    // the record opens a discrepancy as well, which is another act of the same moment
+    await house.record(number, { id: dose, amount: { value: '500', unit: 'mL' } }).expect(201)
     const stop = api.nextId()
     await house.technician.agent
       .post(`/api/doses/${dose}/stop`)
@@ -132,6 +133,18 @@ describe('a kept row that another hand changed', () => {
     const [amount] = await found('changed', `doses ${dose}`)
     expect(amount?.detail).toContain('dose.recorded')
     expect(amount?.detail).toContain(number)
+    const shown = (await house.technician.agent.get(house.doseAt(number)).expect(200)).body.recorded[0]
+    expect(shown).toMatchObject({ record: 'broken', amountText: null })
+    expect(shown.exceptions[0].title).toBe('Not what was recorded')
+    const order = (await house.technician.agent.get(`/api/orders/${number}`).expect(200)).body
+    expect(order.calendar[0].record).toBe('broken')
+    const print = await house.technician.agent.get(`/api/orders/${number}/print`).buffer(true).expect(200)
+    const paper = textOf(print.body as Buffer).replaceAll(/\s+/g, ' ')
+    expect(paper).toContain('Not what was recorded')
+    expect(paper).not.toContain('21.8')
+    const today = JSON.stringify((await house.technician.agent.get('/api/today').expect(200)).body)
+    expect(today).toContain('not what was recorded')
+    expect(today).not.toContain('21.8')
     await byHand([`UPDATE order_events SET kind = 'hold-lifted' WHERE id = $1`, hold])
     expect(await found('changed', `order_events ${hold}`)).toHaveLength(1)
     await byHand([`DELETE FROM bath_stops WHERE id = $1`, stop])

@@ -27,6 +27,8 @@ export interface DoseReadRow {
   /** Contact time of the version it was given under; null where the agent stays in the water. */
   contact_minutes: number | null
   exceptions_text: string
+  /** False where somebody changed it in the database: none of its figures is shown. */
+  is_as_written: boolean
   happened_at: Date
   recorded_at: Date
   by_name: string
@@ -74,7 +76,7 @@ export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
 export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseReadRow[]> {
   return db.query(
     `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, v.contact_minutes,
-            d.exceptions_text, d.happened_at, d.recorded_at, p.printed_name AS by_name,
+            d.exceptions_text, row_is_as_written('doses', d.id::text) AS is_as_written, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,
             s.recorded_by AS stop_recorded_by, ${otherStops} AS other_stops, x.reason AS struck_reason, x.recorded_at AS struck_at,

@@ -10,6 +10,8 @@ export interface RecentDoseRow {
   enclosure_code: string
   amount_entered_value: string | null
   amount_entered_unit: string | null
+  /** False where somebody changed it in the database: none of its figures is shown. */
+  is_as_written: boolean
   contact_minutes: number | null
   has_exceptions: boolean
   happened_at: Date
@@ -25,7 +27,7 @@ export interface RecentDoseRow {
 export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
   return db.query(
     `SELECT d.id, o.number, d.dose_key, d.kind, v.agent, c.code AS enclosure_code, d.amount_entered_value,
-            d.amount_entered_unit, v.contact_minutes, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
+            d.amount_entered_unit, row_is_as_written('doses', d.id::text) AS is_as_written, v.contact_minutes, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
             d.recorded_at, p.printed_name AS by_name, s.happened_at AS stop_at, s.cause AS stop_cause,
             s.seen AS stop_seen, q.printed_name AS stop_by
        FROM live_doses d

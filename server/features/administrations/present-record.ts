@@ -35,7 +35,11 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
     id: row.id,
     key: row.dose_key,
     kind: row.kind,
-    amountText: isLeftOut(row, reader) ? null : storedText(row.amount_entered_value, row.amount_entered_unit),
+    record: row.is_as_written ? 'intact' : 'broken',
+    amountText:
+      isLeftOut(row, reader) || !row.is_as_written
+        ? null
+        : storedText(row.amount_entered_value, row.amount_entered_unit),
     lotNumber: row.lot_number,
     happenedAt: row.happened_at.toISOString(),
     recordedAt: row.recorded_at.toISOString(),
@@ -75,9 +79,19 @@ export function presentRecord(row: DoseReadRow, all: readonly DoseReadRow[], rea
   }
 }
 
+const notAsRecorded: RecordedDose['exceptions'][number] = {
+  ruleId: 'record',
+  code: 'not-as-recorded',
+  level: 'stop',
+  title: doseWords.notAsRecorded,
+  text: doseWords.notAsRecordedText,
+  resolve: [],
+}
+
 /** What the record breaks; an amount in the words of it is left out with the others. */
 function saidExceptions(row: DoseReadRow, leftOut: boolean): RecordedDose['exceptions'] {
   const found = JSON.parse(row.exceptions_text) as RecordedDose['exceptions']
+  if (!row.is_as_written) return [notAsRecorded, ...found.filter(({ code }) => code !== 'amount-differs')]
   if (!leftOut) return found
   return found.map((one) => (one.code === 'amount-differs' ? { ...one, text: doseWords.amountLeftOut } : one))
 }

@@ -121,7 +121,8 @@ export async function readGivenInLast24h(
   at: Date,
 ) {
   const [row]: { total: number | null; unclear: string }[] = await db.query(
-    `SELECT sum(d.given_mg_per_l) AS total, count(*) FILTER (WHERE d.given_mg_per_l IS NULL) AS unclear
+    `SELECT sum(d.given_mg_per_l) AS total, 
+            count(*) FILTER (WHERE d.given_mg_per_l IS NULL OR NOT row_is_as_written('doses', d.id::text)) AS unclear
        FROM ${dosesFromSources}
       WHERE v.agent = $2 AND ${happenedBy('d', '$3')} AND d.happened_at > $3 - interval '24 hours'`,
     [sourceRows(sources), agent, at],

@@ -181,7 +181,11 @@ function recordedCells(dose: RecordedDoseRow, zone: string): TableCell[] {
   const { amount_entered_value: amount, amount_entered_unit: unit, ended_at } = dose
   return [
     doseKindNames[dose.kind],
-    amount === null || unit === null ? '' : formatDose(amount, unit as UnitCode).text,
+    !dose.is_as_written
+      ? doseWords.notAsRecorded
+      : amount === null || unit === null
+        ? ''
+        : formatDose(amount, unit as UnitCode).text,
     sayInstant(dose.happened_at.toISOString(), zone),
     ended_at === null ? '' : sayInstant(ended_at.toISOString(), zone),
     dose.by_name ?? '',

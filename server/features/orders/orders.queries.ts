@@ -162,6 +162,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
             closesAt,
             recorded: last?.kind ?? null,
             recordedAt: last?.happened_at.toISOString() ?? null,
+            record: last?.is_as_written === false ? ('broken' as const) : ('intact' as const),
           }
         }),
         may: mayBe.filter((action) => decide(action, actor.roles).allowed),

@@ -218,6 +218,8 @@ export interface RecordedDoseRow {
   happened_at: Date
   amount_entered_value: string | null
   amount_entered_unit: string | null
+  /** False where somebody changed it in the database: none of its figures is shown. */
+  is_as_written: boolean
   by_name: string | null
   ended_at: Date | null
   /** Who calculated it a second time after themselves, and how many minutes later; null where another person did. */
@@ -229,6 +231,7 @@ export interface RecordedDoseRow {
 export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDoseRow[]> {
   return db.query(
     `SELECT d.dose_key, d.kind, d.happened_at, d.amount_entered_value, d.amount_entered_unit,
+            row_is_as_written('doses', d.id::text) AS is_as_written,
             p.printed_name AS by_name,
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
             a.by_name AS alone_by, a.minutes AS alone_after_minutes

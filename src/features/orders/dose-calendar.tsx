@@ -1,4 +1,5 @@
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
+import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames } from '../../../shared/messages/orders.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { paths } from '../../lib/paths.ts'
@@ -64,6 +65,7 @@ export function DoseCalendar({
                 <b>{words.dose({ key: dose.key })}</b> <span className="num">{say(dose.dueAt)}</span>
                 {', '}
                 {dose.recordedAt === null ? what : words.recordedAt({ what, at: say(dose.recordedAt) })}
+                {dose.record === 'broken' ? <b> {doseWords.notAsRecorded}</b> : null}
                 <small>{words.window({ from: say(dose.opensAt), until: say(dose.closesAt) })}</small>
               </span>
               {sheets ? (

@@ -42,6 +42,7 @@ const record = (given: Partial<RecordedDose> = {}): RecordedDose => ({
   id: 'd1',
   key: '1',
   kind: 'given',
+  record: 'intact',
   amountText: '218\u00a0mL',
   lotNumber: 'PZ-0317',
   happenedAt: now,
