@@ -102,6 +102,8 @@ export const cautionTitles = defineMessages({
   'left-in-over-line': 'Left in the water, and the dose line is for a time',
   'contact-over-line': 'Contact is longer than the dose line',
   'contact-far-over-line': 'Contact is far longer than the dose line',
+  'day-over-line': 'The baths of a day are together longer than the dose line',
+  'day-far-over-line': 'The baths of a day are together far longer than the dose line',
   'contact-over-untimed-line': 'Contact is long, and the dose line names no time',
   'contact-far-over-untimed-line': 'Contact is far too long for a bath whose dose line names no time',
   'doses-add-up': 'Doses add up in the water',
@@ -286,6 +288,10 @@ export const cautionTexts = defineMessages({
     `${minutes(p.minutes)} is longer than the ${minutes(p.limitMinutes)} of the dose line.`,
   'contact-far-over-line': (p) =>
     `${minutes(p.minutes)} is far longer than the ${minutes(p.limitMinutes)} of the dose line.`,
+  'day-over-line': (p) =>
+    `The dose line is for ${minutes(p.limitMinutes)}. All baths of a day together are ${minutes(p.minutes)}, longer.`,
+  'day-far-over-line': (p) =>
+    `The dose line is for ${minutes(p.limitMinutes)}. All baths of a day together are ${minutes(p.minutes)}, far longer.`,
   'contact-over-untimed-line': (p) =>
     `The dose line is for a bath that has an end, and names no time. ${minutes(p.minutes)}, the longest bath or all baths of a day together, is longer than the ${minutes(p.limitMinutes)} that such a bath may take.`,
   'contact-far-over-untimed-line': (p) =>

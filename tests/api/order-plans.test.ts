@@ -166,15 +166,18 @@ describe('the plan of an order', () => {
     expect(third.found).toBe('stop dose-on-dose')
     expect(third.why).toContain('2\u00a0doses of this order are in the water')
     const tech = await api.as('technician')
-    await tech.agent
-      .post(`/api/doses/${first}/stop`)
-      .send({
-        id: api.nextId(),
-        cause: 'time-up',
-        happenedAt: '2026-11-30T12:00:00Z',
-        rescue: 'half changed',
-      })
-      .expect(201)
+    const endFirst = (happenedAt: string) =>
+      tech.agent
+        .post(`/api/doses/${first}/stop`)
+        .send({ id: api.nextId(), cause: 'time-up', happenedAt, rescue: 'half changed' })
+        .expect(201)
+    // ends of a time before the dose take nothing out of the water, and make no more doses of it
+    await endFirst('2026-11-29T17:00:00Z')
+    await endFirst('2026-11-29T17:30:00Z')
+    const stillIn = await sheet('3')
+    expect(stillIn.found).toBe('stop dose-on-dose')
+    expect(stillIn.why).toContain('2\u00a0doses of this order are in the water')
+    await endFirst('2026-11-30T12:00:00Z')
     expect(await sheet('3')).toMatchObject({ found: 'warning dose-on-dose' })
     expect((await sheet('3')).why).not.toContain('of this order')
   })

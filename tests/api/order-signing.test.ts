@@ -106,6 +106,17 @@ describe('what may be signed: an order', () => {
     expect(await fired({ ...asleep, doseLineId: lineOf('sedation') })).toEqual(['stop left-in-bath-line'])
     expect(await fired(asleep)).toEqual(['stop no-line-fits'])
     expect(await fired({ ...asleep, doseLineId: lineOf('sedation'), ...timed(20) })).toEqual([])
+    // a day is as many baths as are planned, and no more than its hours
+    const course = (doses: number, intervalHours: number) => ({
+      ...asleep,
+      doseLineId: lineOf('sedation'),
+      ...timed(60),
+      doses,
+      intervalHours,
+    })
+    expect(await fired(course(2, 2))).toEqual(['warning contact-over-untimed-line'])
+    expect(await fired(course(3, 2))).toEqual(['stop contact-far-over-untimed-line'])
+    expect(await fired({ ...short, ...timed(1000), doses: 6, intervalHours: 8 })).toEqual([])
     // left out, the line loosens nothing: only the one for what stays in sea water counts
     expect(await fired({ target: { value: '20', unit: 'mg/L' } })).toEqual(['stop far-over-default'])
     expect(await fired({ target: { value: '10', unit: 'mg/L' }, ...timed(2880) })).toEqual([

@@ -119,6 +119,8 @@ export interface CautionParams {
   'left-in-over-line': { limitMinutes: number }
   'contact-over-line': { minutes: number; limitMinutes: number }
   'contact-far-over-line': { minutes: number; limitMinutes: number }
+  'day-over-line': { minutes: number; limitMinutes: number }
+  'day-far-over-line': { minutes: number; limitMinutes: number }
   'contact-over-untimed-line': { minutes: number; limitMinutes: number }
   'contact-far-over-untimed-line': { minutes: number; limitMinutes: number }
   'doses-add-up': DosesTogether

@@ -47,7 +47,9 @@ export function isForContact(
   }
   if (longestContactMinutes === null) return true
   const minutes = valueOf(facts.order.contactMinutes)
-  return minutes === null || !exceeds(minutes, longestContactMinutes)
+  if (minutes !== null && exceeds(minutes, longestContactMinutes)) return false
+  const longest = longestContactOrDay(facts)
+  return longest === null || !exceeds(longest, longestContactMinutes * contactStopFactor)
 }
 
 /** Every line of the drug that a figure can be held against. */

@@ -74,7 +74,6 @@ export function orderFacts(
   dose: BathDose | null,
 ): CautionFacts {
   const minutes = draft.timing === 'indefinite' ? null : draft.contactMinutes
-  const dosesPerDay = draft.intervalHours !== null && draft.intervalHours < 24 ? 24 / draft.intervalHours : 1
   const hours = draft.intervalHours === null ? 0 : draft.intervalHours * (draft.doses - 1)
   const endsAt =
     draft.startsAt === null || draft.timing === 'indefinite'
@@ -101,7 +100,7 @@ export function orderFacts(
       contactMinutesPerDay:
         draft.timing === 'indefinite'
           ? notApplicable()
-          : orUnknown(minutes === null ? null : minutes * dosesPerDay, 'the order'),
+          : orUnknown(minutes === null ? null : minutesPerDay(minutes, draft), 'the order'),
       setting: orUnknown(draft.setting, 'the order'),
       startsAt: orUnknown(draft.startsAt, 'the order'),
       endsAt: orUnknown(endsAt, 'the order'),
@@ -141,6 +140,12 @@ export function orderFacts(
     lifeSupport: { ...base.lifeSupport, lights: fill(base.lifeSupport.lights, said.lights) },
     animals: { ...base.animals, withoutExperience: experience },
   }
+}
+
+/** What the contacts of one day make together: no more of them than are planned, and no longer than a day or the one contact. */
+function minutesPerDay(minutes: number, { intervalHours, doses }: BathOrderDraft): number {
+  const dosesPerDay = intervalHours !== null && intervalHours < 24 ? Math.min(24 / intervalHours, doses) : 1
+  return Math.min(minutes * Math.max(1, dosesPerDay), Math.max(minutes, 24 * 60))
 }
 
 function amountFact(dose: BathDose | null, unit: 'g' | 'mL'): Fact<number> {

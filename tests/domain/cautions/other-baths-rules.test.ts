@@ -117,6 +117,29 @@ describe('R49: water and contact of the dose line that is named', () => {
   ])('%s', (_, longestContactMinutes, minutes, expected) =>
     expect(named({ longestContactMinutes }, minutes)).toEqual(expected),
   )
+  it.each<[string, number, number, string[]]>([
+    ['one bath a day', 30, 30, []],
+    ['two, as long together as the line', 15, 30, []],
+    ['two', 30, 60, ['warning day-over-line']],
+    ['two and a little', 30, 60.1, ['stop day-far-over-line']],
+    ['half an hour of every two hours', 30, 360, ['stop day-far-over-line']],
+    ['one that is too long already', 40, 40, ['warning contact-over-line']],
+  ])('adds up the baths of a day for a line of 30 minutes: %s', (_, minutes, minutesPerDay, expected) => {
+    const line = aLine(75, { longestContactMinutes: 30 })
+    const facts = someFacts('hydrogen-peroxide', mg(75), {
+      order: { defaultRange: known(line), ...contact(minutes, minutesPerDay) },
+    })
+    expect(firedBy('R49', facts)).toEqual(expected)
+  })
+  it('says that it is the day that is too long', () => {
+    const facts = someFacts('hydrogen-peroxide', mg(75), {
+      order: { defaultRange: known(aLine(75, { longestContactMinutes: 30 })), ...contact(30, 360) },
+    })
+    const found = evaluateCautions({ facts, stage: 'design' }).cautions.find(({ ruleId }) => ruleId === 'R49')
+    expect(found && plain(sayCaution(found, 'Europe/Lisbon').text)).toBe(
+      'The dose line is for 30 minutes. All baths of a day together are 6 hours, far longer.',
+    )
+  })
   it('stops a line for a bath whose agent is to stay, though it names no minutes', () => {
     const bath = { stays: false, longestContactMinutes: null }
     expect(named(bath, null)).toEqual(['stop left-in-bath-line'])
@@ -225,6 +248,16 @@ describe('R26, R47: no line is named, and only lines for such water and such a c
     ['the same an hour of every two', of(330, sedation, 60, known('marine'), 720), ['stop no-line-fits']],
     ['75 mg/L for half an hour', of(75, peroxide, 30), ['warning line-not-named']],
     ['75 mg/L for five hours', of(75, peroxide, 300), ['stop no-line-fits']],
+    [
+      '75 mg/L for half an hour, twice a day',
+      of(75, peroxide, 30, known('marine'), 60),
+      ['warning line-not-named'],
+    ],
+    [
+      '75 mg/L for half an hour of every two',
+      of(75, peroxide, 30, known('marine'), 360),
+      ['stop no-line-fits'],
+    ],
     ['100 mg/L is a figure for fresh water', of(100, peroxide, 30), ['warning over-default']],
     ['in water that nobody named', of(100, peroxide, 30, unknown()), ['warning line-not-named']],
   ])('%s', (_, facts, expected) => expect(firedBy('R26', facts)).toEqual(expected))

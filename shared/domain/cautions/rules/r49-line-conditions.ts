@@ -64,14 +64,18 @@ function judgeContact(line: DefaultRange, facts: CautionFacts, limits: ContactLi
       : judgeUntimedBath(facts, limits)
   if (limitMinutes === null) return []
   if (isLeftIn) return [{ code: 'left-in-over-line', level: 'stop', params: { limitMinutes }, resolvedBy }]
-  const minutes = valueOf(facts.order.contactMinutes)
+  const minutes = longestContactOrDay(facts)
   if (minutes === null || !exceeds(minutes, limitMinutes)) return []
   const isFar = exceeds(minutes, limitMinutes * limits.contactStopFactor)
+  const code = exceeds(minutes, valueOf(facts.order.contactMinutes) ?? 0)
+    ? (['day-over-line', 'day-far-over-line'] as const)
+    : (['contact-over-line', 'contact-far-over-line'] as const)
   return [
     {
-      code: isFar ? 'contact-far-over-line' : 'contact-over-line',
+      code: code[isFar ? 1 : 0],
       level: isFar ? 'stop' : 'warning',
-      params: { minutes, limitMinutes },
+      // a day is seldom a whole number of intervals
+      params: { minutes: Math.ceil(minutes), limitMinutes },
       resolvedBy,
     },
   ]
