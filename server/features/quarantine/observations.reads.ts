@@ -59,6 +59,23 @@ export interface ObservationsFilter {
   limit?: number
 }
 
+const notStruck = `NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)`
+
+/** One page of them by themselves: what came of each is looked up for those that are shown, not for all of the house. */
+const observationPage = `
+  SELECT o.*, count(*) OVER ()::int AS total
+    FROM observations o
+   WHERE ($1::uuid IS NULL OR o.id = $1)
+     AND ($2::text IS NULL OR o.id IN (SELECT k.observation_id FROM observation_cases k
+                                         JOIN quarantine_cases c ON c.id = k.case_id WHERE c.number = $2))
+     AND ($3::text IS NULL OR o.enclosure_id = (SELECT e.id FROM enclosures e WHERE e.code = $3))
+     AND (NOT $4::boolean OR (o.for_veterinarian AND ${notStruck}
+          AND NOT EXISTS (SELECT 1 FROM observation_reviews r WHERE r.observation_id = o.id)))
+     AND (NOT $7::boolean OR (o.unassigned_dead > 0 AND ${notStruck}
+          AND NOT EXISTS (SELECT 1 FROM observation_bodies b WHERE b.observation_id = o.id)))
+   ORDER BY o.happened_at DESC, o.id DESC
+   LIMIT $5 OFFSET $6`
+
 /** Observations with everything that came of them, the newest first. */
 export function readObservations(db: Db, filter: ObservationsFilter): Promise<ObservationReadRow[]> {
   return db.query(
@@ -79,8 +96,8 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
               WHERE d.notice_id = n.id AND d.outcome = 'sent') AS notice_sent,
             (SELECT count(*)::int FROM notice_deliveries d
               WHERE d.notice_id = n.id AND d.outcome = 'failed') AS notice_failed,
-            count(*) OVER ()::int AS total
-       FROM observations o
+            o.total
+       FROM (${observationPage}) o
        JOIN enclosures e ON e.id = o.enclosure_id
        LEFT JOIN people w ON w.id = o.recorded_by
        LEFT JOIN LATERAL (SELECT r.* FROM observation_reviews r WHERE r.observation_id = o.id
@@ -90,14 +107,7 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
        LEFT JOIN observation_bodies b ON b.observation_id = o.id
        LEFT JOIN people bp ON bp.id = b.recorded_by
        LEFT JOIN notices n ON n.observation_id = o.id
-      WHERE ($1::uuid IS NULL OR o.id = $1)
-        AND ($2::text IS NULL OR EXISTS (SELECT 1 FROM observation_cases k JOIN quarantine_cases c ON c.id = k.case_id
-                                          WHERE k.observation_id = o.id AND c.number = $2))
-        AND ($3::text IS NULL OR e.code = $3)
-        AND (NOT $4::boolean OR (o.for_veterinarian AND r.id IS NULL AND v.id IS NULL))
-        AND (NOT $7::boolean OR (o.unassigned_dead > 0 AND b.id IS NULL AND v.id IS NULL))
-      ORDER BY o.happened_at DESC, o.id DESC
-      LIMIT $5 OFFSET $6`,
+      ORDER BY o.happened_at DESC, o.id DESC`,
     [
       filter.id ?? null,
       filter.case ?? null,

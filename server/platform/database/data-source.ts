@@ -7,11 +7,14 @@ import { WrittenRows } from './written-rows.ts'
 
 export type EntityClass = (new () => object) | EntitySchema
 
+/** Enough to keep a machine of a few cores busy; on more, reads wait for processors and each has its own plans to make. */
+const mostConnections = 6
+
 /** Connects as the runtime role. Refuses a role that could get round the ledgers. */
 export async function connectRuntime(
   url: string,
   entities: readonly EntityClass[],
-  poolSize = 10,
+  poolSize = mostConnections,
 ): Promise<DataSource> {
   const dataSource = new DataSource({
     type: 'postgres',
@@ -26,6 +29,7 @@ export async function connectRuntime(
     extra: {
       options: '-c timezone=UTC -c jit=off -c plan_cache_mode=force_generic_plan',
       Client: PreparingClient,
+      idleTimeoutMillis: 600_000, // a new connection plans everything anew
     },
   })
   await dataSource.initialize()
