@@ -6,6 +6,7 @@ import path from 'node:path'
 import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { launchChromium, newSession, watchForTroubles } from '../support/chromium.ts'
+import { judge } from '../support/axe.ts'
 import { projectRoot } from '../support/project-files.ts'
 import { runCommand } from '../../server/cli/run-command.mjs'
 
@@ -20,6 +21,13 @@ const scripts: Record<string, string> = {
   '/refused': 'fetch("/forbidden")',
   '/elsewhere': 'fetch("http://elsewhere.invalid/figures").catch(() => {})',
 }
+
+const row = (style: string, words: string) => `<li style="${style}">${words}</li>`
+scripts['/faint'] =
+  `document.documentElement.lang = 'en'; onload = () => document.body.innerHTML = ${JSON.stringify(
+    `<main><h1>Contrast</h1><ul>${row('', 'ink').repeat(40)}${row('color: #bbb', 'faint')}${row('', 'ink').repeat(40)}
+   <li style="background: #333"><span>ink on a dark ground</span></li></ul></main>`,
+  )}`
 
 let browser: Browser
 let server: Server
@@ -108,5 +116,19 @@ describe('a browser session', () => {
     } finally {
       rmSync(folder, { recursive: true, force: true })
     }
+  })
+})
+
+describe('the accessibility checker', () => {
+  it('finds the one faint row of a list, and ink upon another ground', async () => {
+    const { page } = await newSession(browser, { width: 390, height: 844 })
+    await page.goto(`${address}/faint`)
+    const { faults } = await judge(page, 'main')
+    expect(faults.map((fault) => fault.split('\n')[1])).toEqual([
+      expect.stringContaining('li'),
+      expect.stringContaining('span'),
+    ])
+    expect(faults[0]).toContain('nth-child(41)')
+    expect(faults.join()).toContain('color-contrast')
   })
 })

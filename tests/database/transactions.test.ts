@@ -51,6 +51,28 @@ describe('a transaction', () => {
     expect(begins).toBe(3)
   })
 
+  it('reads through the pool over its own connection: as many as there are connections do not wait for one another', async () => {
+    const one = (kind: string) =>
+      transactions.inTransaction(context, async (tx) => {
+        await tx.manager.query(`INSERT INTO counters (kind, last_number) VALUES ($1, 7)`, [kind])
+        await pause(20)
+        return dataSource.query<{ last_number: number }[]>(
+          `SELECT last_number FROM counters WHERE kind = $1`,
+          [kind],
+        )
+      })
+    const kinds = Array.from({ length: 12 }, (_, index) => `own-${String(index)}`)
+    expect(await Promise.all(kinds.map(one))).toEqual(kinds.map(() => [{ last_number: 7 }]))
+  })
+
+  it('is refused a second connection', async () => {
+    const second = transactions.inTransaction(context, async () => {
+      const runner = dataSource.createQueryRunner()
+      await runner.connect()
+    })
+    await expect(second).rejects.toThrow('second connection')
+  })
+
   it('answers busy when a lock is held too long', async () => {
     await owner.query('BEGIN')
     await owner.query(`UPDATE counters SET last_number = 1 WHERE kind = 'slow'`)

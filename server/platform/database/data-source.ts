@@ -1,7 +1,7 @@
 import type pg from 'pg'
-import { DataSource } from 'typeorm'
-import type { EntitySchema } from 'typeorm'
+import type { DataSource, EntitySchema } from 'typeorm'
 import type { PostgresDriver } from 'typeorm/driver/postgres/PostgresDriver.js'
+import { guardPool, OneConnectionSource } from './one-connection.ts'
 import { PreparingClient } from './preparing-client.ts'
 import { WrittenRows } from './written-rows.ts'
 
@@ -16,7 +16,7 @@ export async function connectRuntime(
   entities: readonly EntityClass[],
   poolSize = mostConnections,
 ): Promise<DataSource> {
-  const dataSource = new DataSource({
+  const dataSource = new OneConnectionSource({
     type: 'postgres',
     url,
     entities: [...entities],
@@ -33,6 +33,7 @@ export async function connectRuntime(
     },
   })
   await dataSource.initialize()
+  guardPool(poolOf(dataSource))
   const [role]: Record<string, boolean>[] = await dataSource.query(
     `SELECT r.rolsuper, r.rolcreatedb, r.rolcreaterole, r.rolreplication, r.rolbypassrls
        FROM pg_roles r WHERE r.rolname = current_user`,

@@ -1,5 +1,6 @@
 import { DataSource } from 'typeorm'
 import type { Db } from './db.ts'
+import { isWithinTransaction } from './one-connection.ts'
 
 type Reads = Record<string, () => Promise<unknown>>
 type Answers<R extends Reads> = { [K in keyof R]: Awaited<ReturnType<R[K]>> }
@@ -11,7 +12,7 @@ export async function readTogether<R extends Reads>(db: Db, reads: R): Promise<A
     answers[name] = await ask()
   }
   const all = Object.entries(reads)
-  if (db instanceof DataSource) await Promise.all(all.map(read))
+  if (db instanceof DataSource && !isWithinTransaction()) await Promise.all(all.map(read))
   else for (const one of all) await read(one)
   return answers as Answers<R>
 }

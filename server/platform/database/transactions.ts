@@ -10,6 +10,7 @@ import { marksOfWritten } from '../audit/row-marks.ts'
 import { takeWritten } from './written-rows.ts'
 import type { Written } from './written-rows.ts'
 import { idAlreadyUsed } from './id-already-used.ts'
+import { withinTransaction } from './one-connection.ts'
 import { problemFromConstraint } from './constraint-problems.ts'
 
 declare const made: unique symbol
@@ -145,7 +146,7 @@ export function createTransactions(parts: { dataSource: DataSource; clock: Clock
         audit: (entry: AuditDraft) => void acts.push({ entry, written: takeWritten(manager) }),
         afterCommit: (next: () => Promise<void> | void) => void later.push(next),
       } as unknown as Tx
-      const result = await work(tx)
+      const result = await withinTransaction(runner, () => work(tx))
       if (context.command)
         await manager.query(`UPDATE command_keys SET result = $3 WHERE key = $1 AND actor_id = $2`, [
           context.command.key,
