@@ -20,6 +20,7 @@ import { EndsThatCount1764600000034 } from './0034-ends-that-count.ts'
 import { MarksByKey1764600000035 } from './0035-marks-by-key.ts'
 import { AmountsPreviewed1764600000036 } from './0036-amounts-previewed.ts'
 import { RowsAsWritten1764600000037 } from './0037-rows-as-written.ts'
+import { AmountsLearnt1764600000038 } from './0038-amounts-learnt.ts'
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
@@ -47,5 +48,6 @@ export const migrations = [
   MarksByKey1764600000035,
   AmountsPreviewed1764600000036,
   RowsAsWritten1764600000037,
+  AmountsLearnt1764600000038,
   RowMarkLookup1764600000040,
 ]

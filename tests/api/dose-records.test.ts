@@ -1,11 +1,12 @@
 import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
-import type { FormalinHouse } from '../builders/a-bath.ts'
+import type { OrderRow } from '../../shared/contracts/orders.contract.ts'
+import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
 import { textOf } from '../pdf/support/poppler.ts'
 import { fetchPdf } from '../support/fetch-pdf.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
-import type { TestApi } from '../support/api.ts'
+import type { TestApi, TestPerson } from '../support/api.ts'
 
 let api: TestApi
 let owner: pg.Client
@@ -140,6 +141,105 @@ describe('an order of several baths', () => {
       '2026-12-01T18:45:00.000Z',
       '2026-12-01T18:50:00.000Z',
     ])
+  })
+})
+
+describe('what was recorded under one order tells the amount of the next for that drug and water', () => {
+  const shows = /218(\.1\d*)?[ \u00a0]?mL|"218"|218\.1/
+  const dayMs = 24 * 60 * 60_000
+  let bath: BathTank
+  let over: string
+  beforeEach(async () => {
+    bath = await house.tankWithSchool()
+    over = await house.signedBath(bath)
+  })
+  const isEnded = async () => {
+    const dose = api.nextId()
+    await house.record(over, { id: dose }).expect(201)
+    await stopBath(dose, '2026-12-01T18:20:00Z').expect(201)
+  }
+  const next = (given: object = {}) => house.signedBath(bath, given)
+  const read = async (by: TestPerson, path: string) => {
+    const { body, text } = await by.agent.get(path).expect(200)
+    return path.startsWith('/api/orders.csv') ? text : JSON.stringify(body)
+  }
+  const shut = async (number: string, by: TestPerson) =>
+    (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body.secondShut
+
+  it('so it is left out everywhere for whoever may be asked, who is remembered when they look all the same', async () => {
+    const keeper = await api.as('keeper')
+    await isEnded()
+    const listed = [`/api/orders?q=${over}`, `/api/orders.csv?q=${over}`]
+    for (const path of listed) expect(await read(keeper, path)).toMatch(shows)
+    const number = await next()
+    await house.freshWater(bath)
+    await house.calculateFirst(number).expect(201)
+    for (const path of [...listed, `/api/orders/${over}`, `${house.doseAt(over)}?blind=yes`])
+      expect(await read(keeper, path), path).not.toMatch(shows)
+    const all = JSON.parse(await read(keeper, '/api/orders?limit=50')).rows as OrderRow[]
+    expect(all.find((row) => row.number === over)).toMatchObject({ amountText: null })
+    const today = JSON.parse(await read(keeper, '/api/today'))
+    const told = [...today.items, ...today.log].filter((one) => Object.values(one.params).includes(over))
+    expect(told.length).toBeGreaterThan(0)
+    expect(JSON.stringify(told)).not.toMatch(shows)
+    expect(await shut(number, keeper)).toBeNull()
+
+    // on its own page, on its sheet and on paper, it is seen, and with it that of the next
+    const looks = [`/api/orders/${over}?amounts=yes`, house.doseAt(over), `/api/orders/${over}/print`]
+    for (const [i, path] of looks.entries()) {
+      const by = await api.person({
+        email: `looks-${String(i)}@harrow-point.example`,
+        printedName: `Looks ${String(i)}`,
+        roles: ['keeper'],
+      })
+      expect(await shut(number, by), path).toBeNull()
+      await by.agent.get(path).expect(200)
+      expect(await shut(number, by), path).toBe('amount-seen')
+    }
+    await house.calculateSecond(bath, number, {}, keeper).expect(201)
+  })
+
+  it('so the audit trail leaves it out for a veterinarian who may be asked', async () => {
+    const other = await api.person({
+      email: 'vet2@harrow-point.example',
+      printedName: 'Second veterinarian',
+      roles: ['veterinarian'],
+    })
+    await isEnded()
+    const trail = () => read(other, `/api/audit?q=${over}`)
+    expect(await trail()).toMatch(shows)
+    const number = await next()
+    expect(await trail()).not.toMatch(shows)
+    await other.agent.get(`/api/orders/${number}?amounts=yes`).expect(200)
+    expect(await trail()).toMatch(shows)
+  })
+
+  it('so nobody is asked who learnt it there within a month, except who had worked it out blind', async () => {
+    await house.freshWater(bath)
+    await house.calculateFirst(over).expect(201)
+    await house.calculateSecond(bath, over).expect(201)
+    const [given] = (await house.give(over).expect(201)).body.recorded
+    await stopBath(given.id, '2026-12-01T18:20:00Z').expect(201)
+    const veterinarian = await api.as('veterinarian')
+    const withheld = async (number: string, by: TestPerson) =>
+      JSON.parse(await read(by, `/api/orders/${number}`)).amountsWithheld as boolean
+    const soon = await next({ target: { value: '90', unit: 'uL/L' } })
+    await house.calculateFirst(soon, veterinarian).expect(201)
+    expect(await shut(soon, house.technician)).toBe('amount-seen')
+    expect(await withheld(over, house.technician)).toBe(false)
+    expect(await shut(soon, house.second)).toBeNull()
+    expect(await withheld(over, house.second)).toBe(true)
+    // another water is another amount
+    const elsewhere = await house.signedBath(await house.tankWithSchool())
+    await house.calculateFirst(elsewhere, veterinarian).expect(201)
+    expect(await shut(elsewhere, house.technician)).toBeNull()
+    // and a month is long enough to forget a figure
+    api.clock.set(new Date(testDay.getTime() + 31 * dayMs))
+    const late = await next({ startsAt: api.clock.now().toISOString() })
+    await house.freshWater(bath)
+    await house.calculateFirst(late, veterinarian).expect(201)
+    expect(await shut(late, house.technician)).toBeNull()
+    expect(await withheld(over, house.technician)).toBe(true)
   })
 })
 

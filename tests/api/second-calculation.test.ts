@@ -12,9 +12,12 @@ let bath: BathTank
 beforeAll(async () => {
   api = await startApi()
   house = await aFormalinHouse(api)
+})
+// each in water of its own: what somebody learns of one order they know of the next one there
+beforeEach(async () => {
+  api.clock.set(testDay)
   bath = await house.tankWithSchool()
 })
-beforeEach(() => api.clock.set(testDay))
 afterAll(() => api.stop())
 
 const aBathToCalculate = async () => {

@@ -132,29 +132,6 @@ export function readCalculations(
   )
 }
 
-/**
- * People who know the amount of a dose that they did not work out blind: shown it before its two calculations agreed, or
- * recorded one, under any version of the order, or signed it, or began to write it. That an amended version has another amount does not make them forget the first.
- */
-export async function readSeenBy(db: Db, orderVersionId: string, doseKey: string): Promise<string[]> {
-  const rows: { person_id: string }[] = await db.query(
-    `WITH versions AS (
-       SELECT v.id, v.signed_by FROM order_versions v
-        WHERE v.order_id = (SELECT o.order_id FROM order_versions o WHERE o.id = $1))
-     SELECT s.person_id FROM dose_amounts_seen s JOIN versions v ON v.id = s.order_version_id WHERE s.dose_key = $2
-      UNION SELECT v.signed_by FROM versions v
-      UNION SELECT o.created_by FROM orders o JOIN order_versions v ON v.order_id = o.id
-             WHERE v.id = $1 AND o.created_by IS NOT NULL
-      UNION SELECT p.person_id FROM order_previewers p JOIN order_versions v ON v.order_id = p.order_id WHERE v.id = $1
-      UNION SELECT f.recorded_by FROM dose_calculations f JOIN versions v ON v.id = f.order_version_id
-             WHERE f.dose_key = $2 AND f.part = 'first' AND f.order_version_id <> $1
-      UNION SELECT d.recorded_by FROM doses d JOIN versions v ON v.id = d.order_version_id
-             WHERE d.dose_key = $2 AND d.amount_entered_value IS NOT NULL`,
-    [orderVersionId, doseKey],
-  )
-  return rows.map((row) => row.person_id)
-}
-
 export async function readOrderNumberOfDose(db: Db, doseId: string) {
   const [row]: { number: string; dose_key: string }[] = await db.query(
     `SELECT o.number, d.dose_key FROM doses d

@@ -179,7 +179,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
         refuseBroken(situation)
         await refuseOtherLot(tx, situation, given.lotId)
-        const calculations = await parts.calculations(situation.versionId, key, tx)
+        const calculations = await parts.calculations(situation, tx)
         // before the second calculation the answer is the same for every amount and names none: it is not to be found by trying
         const isOpen = !needsSecond(situation) || secondStands(calculations)
         const why = obstacles(situation, calculations, { hide: !isOpen })
@@ -219,10 +219,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
           lotId: given.lotId,
         })
         refuseLongBefore(situation, happenedAt)
-        const calculations = calculationsBy(
-          await parts.calculations(situation.versionId, key, tx),
-          happenedAt,
-        )
+        const calculations = calculationsBy(await parts.calculations(situation, tx), happenedAt)
         const rested =
           wentIn(given) && secondStands(calculations) && firstOf(calculations)?.lot_id === given.lotId
         await writeDose(tx, situation, {

@@ -6,7 +6,8 @@ import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
-import { insertSeen } from '../orders/index.ts'
+import { noteLearnt } from '../orders/index.ts'
+import type { Learnt } from '../orders/index.ts'
 import * as repository from './administrations.repository.ts'
 import { compareCalculations, comparedWith } from './compare-calculations.ts'
 import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
@@ -23,28 +24,8 @@ const allowedDrift = ({ content }: DoseSituation) => content.fields.allowedVolum
 export function createCalculations(parts: AdministrationsParts) {
   return {
     /** Remembers that somebody was shown the amount of doses before their two calculations agreed. */
-    async noteSeen(
-      context: RequestContext,
-      seen: {
-        orderVersionId: string
-        doseKeys: readonly string[]
-        order: { id: string; number: string }
-      },
-    ): Promise<void> {
-      await parts.transactions.inTransaction(context, async (tx) => {
-        const { orderVersionId } = seen
-        const fresh: string[] = []
-        for (const doseKey of seen.doseKeys)
-          if (await insertSeen(tx, { id: parts.ids.next(), orderVersionId, doseKey, personId: personOf(tx) }))
-            fresh.push(doseKey)
-        if (fresh.length > 0)
-          tx.audit({
-            action: 'dose.see-amount',
-            subject: { kind: 'order', id: seen.order.id, label: seen.order.number },
-            after: { keys: fresh },
-          })
-      })
-    },
+    noteSeen: (context: RequestContext, learnt: readonly Learnt[]): Promise<void> =>
+      parts.transactions.inTransaction(context, (tx) => noteLearnt(tx, parts.ids, personOf(tx), learnt)),
 
     /** Works the amount out for the water as it is now and the lot in the hand. */
     async calculateFirst(
@@ -112,7 +93,7 @@ export function createCalculations(parts: AdministrationsParts) {
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at })
         refuseBroken(situation)
-        const calculations = await parts.calculations(situation.versionId, key, tx)
+        const calculations = await parts.calculations(situation, tx)
         // sent again: the answer is the one of the first time
         if (calculations.all.some((one) => one.id === given.id && one.part === 'second')) return
         const { enclosureRead, markRead, lotRead, nobodyReached = false } = given

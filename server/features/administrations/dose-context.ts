@@ -18,7 +18,7 @@ export interface AdministrationsParts extends DoseSituationParts {
   transactions: Transactions
   clock: Clock
   facility: FacilityService
-  calculations(versionId: string, key: string, tx: Tx): Promise<Calculations>
+  calculations(of: Pick<DoseSituation, 'row' | 'versionId' | 'planned'>, tx: Tx): Promise<Calculations>
   ids: Ids
 }
 

@@ -6,16 +6,18 @@ import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Animals } from '../animals/index.ts'
 import type { Documents } from '../documents/index.ts'
 import type { FacilityService } from '../facility/index.ts'
+import { readKnown } from '../orders/index.ts'
 import type { OpenOrder, Orders } from '../orders/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { readRecentDoses, readWantedSeconds } from './dose-work.reads.ts'
-import { readCalculations, readOrderNumberOfDose, readSeenBy } from './administrations.reads.ts'
+import { readCalculations, readOrderNumberOfDose } from './administrations.reads.ts'
 import { administrationRoutes } from './administrations.routes.ts'
 import type { AdministrationsQueries } from './administrations.routes.ts'
 import { createAdministrationsService } from './administrations.service.ts'
 import { DoseOverrideRow } from './dose-override.entity.ts'
 import { BathStopRow, DoseCalculation, DoseRow, DoseVoidRow } from './dose.entity.ts'
 import { readDoseSituation } from './dose-situation.ts'
+import type { DoseSituation } from './dose-situation.ts'
 import { findDueDoses } from './due-doses.ts'
 import { isShownEarly, presentSheet, showsAmount } from './present-sheet.ts'
 import { firstOf, workedOutBlind } from './second-person.ts'
@@ -26,9 +28,18 @@ export type { RecentDoseRow } from './dose-work.reads.ts'
 export { verifyOverrides } from './signed-overrides.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow, DoseVoidRow, DoseOverrideRow]
 
-async function calculationsOf(db: Db, versionId: string, key: string): Promise<Calculations> {
+async function calculationsOf(
+  db: Db,
+  { row, versionId, planned }: Pick<DoseSituation, 'row' | 'versionId' | 'planned'>,
+): Promise<Calculations> {
+  const { key } = planned
   const all = await readCalculations(db, versionId, key)
-  return { all, seenBy: await readSeenBy(db, versionId, key) }
+  const { knowers } = await readKnown(db, [row.id])
+  // whoever made a first calculation under this version is told by the calculations themselves
+  const seenBy = (knowers.get(row.id) ?? []).filter(
+    (one) => (one.key === null || one.key === key) && one.firstOf !== versionId,
+  )
+  return { all, seenBy: seenBy.map(({ personId }) => personId) }
 }
 
 export function createAdministrations(
@@ -46,36 +57,38 @@ export function createAdministrations(
   const service = createAdministrationsService({
     ...parts,
     ...outside,
-    calculations: (versionId, key, tx) => calculationsOf(tx.manager, versionId, key),
+    calculations: (of, tx) => calculationsOf(tx.manager, of),
   })
   const now = () => clock.now()
   /** A dose as it stands, worked out for the lot in the hand once there is a first calculation. */
   async function read(number: string, key: string) {
     const situation = await readDoseSituation(outside, number, key, now())
-    const calculations = await calculationsOf(dataSource, situation.versionId, key)
+    const calculations = await calculationsOf(dataSource, situation)
     const lotId = firstOf(calculations)?.lot_id ?? null
     if (lotId === null || lotId === situation.content.fields.lotId) return { situation, calculations }
     return { situation: await readDoseSituation(outside, number, key, now(), { lotId }), calculations }
   }
   /**
    * The sheet for somebody. Whoever is shown the amount before the two calculations agree is remembered, for the other
-   * doses to come as well: they have the same one. Whoever worked it out blind themselves has earned it.
+   * doses to come as well, also those of another order for this drug and water: they have the same one. Whoever worked it out blind themselves has earned it.
    */
   async function sheetFor(context: RequestContext, number: string, key: string, blind: boolean) {
     const found = await read(number, key)
     const { actor } = context
-    const elsewhere = (await orders.queries.amountsToNote(number, actor)).keys.filter(
-      (other) => other !== key,
-    )
+    const { versionId, row } = found.situation
+    const elsewhere = (await orders.queries.amountsToNote(number, actor))
+      .map((one) =>
+        one.orderId === row.id ? { ...one, keys: one.keys.filter((other) => other !== key) } : one,
+      )
+      .filter(({ keys }) => keys.length > 0)
     const mayBeSecondElsewhere = elsewhere.length > 0
     const sheet = presentSheet({ ...found, blind, mayBeSecondElsewhere, actor, now: now().toISOString() })
-    const { versionId, row } = found.situation
+    const own = { orderId: row.id, number, versionId, keys: [key] }
     const learnt = [
-      ...(isShownEarly(sheet, found.calculations) ? [key] : []),
+      ...(isShownEarly(sheet, found.calculations) ? [own] : []),
       ...(showsAmount(sheet) && !workedOutBlind(found.calculations, actor) ? elsewhere : []),
     ]
-    if (learnt.length > 0)
-      await service.noteSeen(context, { orderVersionId: versionId, doseKeys: learnt, order: row })
+    if (learnt.length > 0) await service.noteSeen(context, learnt)
     return { ...found, sheet }
   }
   const print = createSheetPrinter({ ...parts, documents: parts.documents.service, sheetFor })

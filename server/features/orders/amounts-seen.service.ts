@@ -1,19 +1,23 @@
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import type { Db } from '../../platform/database/db.ts'
-import type { Transactions } from '../../platform/database/transactions.ts'
+import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { Ids } from '../../platform/ids.ts'
 import { insertPreviewed, insertSeen, readNotPreviewed } from './amounts-seen.repository.ts'
 import { mayBeSecond } from './blind-order.ts'
+import type { Learnt } from './blind-order.ts'
 import type { OrderSituation } from './order-situation.ts'
 import type { OrderQueries } from './orders.queries.ts'
-import { readNumbersLike } from './orders.reads.ts'
+import { readNumbersLike } from './knowers.reads.ts'
 
 export type NoteAmountsSeen = (context: RequestContext, number: string) => Promise<void>
 export type NoteAmountsPreviewed = (context: RequestContext, found: OrderSituation) => Promise<void>
 
-/** Remembers that the order itself showed somebody the amount: they are not the blind second person of its doses to come. */
+/**
+ * Remembers that the order itself showed somebody the amount: they are not the blind second person of its doses to come,
+ * nor of those of another order for its drug and water.
+ */
 export function createAmountsSeen(parts: {
   transactions: Transactions
   ids: Ids
@@ -22,20 +26,30 @@ export function createAmountsSeen(parts: {
   return async (context, number) => {
     const { personId } = context.actor
     if (personId === null) throw new Problem('not-signed-in')
-    const { orderId, versionId, keys } = await parts.queries.amountsToNote(number, context.actor)
-    if (versionId === null || keys.length === 0) return
-    await parts.transactions.inTransaction(context, async (tx) => {
-      const fresh: string[] = []
-      for (const doseKey of keys)
-        if (await insertSeen(tx, { id: parts.ids.next(), orderVersionId: versionId, doseKey, personId }))
-          fresh.push(doseKey)
-      if (fresh.length > 0)
-        tx.audit({
-          action: 'dose.see-amount',
-          subject: { kind: 'order', id: orderId, label: number },
-          after: { keys: fresh },
-        })
-    })
+    const learnt = await parts.queries.amountsToNote(number, context.actor)
+    if (learnt.length === 0) return
+    await parts.transactions.inTransaction(context, (tx) => noteLearnt(tx, parts.ids, personId, learnt))
+  }
+}
+
+/** Notes once, and in the audit trail, that a person was shown the amounts of doses to come. */
+export async function noteLearnt(
+  tx: Tx,
+  ids: Ids,
+  personId: string,
+  learnt: readonly Learnt[],
+): Promise<void> {
+  for (const { orderId, number, versionId, keys } of learnt) {
+    const fresh: string[] = []
+    for (const doseKey of keys)
+      if (await insertSeen(tx, { id: ids.next(), orderVersionId: versionId, doseKey, personId }))
+        fresh.push(doseKey)
+    if (fresh.length > 0)
+      tx.audit({
+        action: 'dose.see-amount',
+        subject: { kind: 'order', id: orderId, label: number },
+        after: { keys: fresh },
+      })
   }
 }
 

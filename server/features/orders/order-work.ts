@@ -1,7 +1,8 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
-import { isBlindTo } from './blind-order.ts'
+import { leaveOut, readBlindness } from './blind-order.ts'
+import type { Blindness } from './blind-order.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
 import { asksForSecond, plannedOf, presentOrderRow } from './orders.present.ts'
@@ -21,38 +22,48 @@ export interface OrderWork {
 }
 
 /** Signed orders that were not discontinued, each with its plan of doses. */
-export function openOrders(rows: readonly OrderReadRow[], now: string) {
+export function openOrders(rows: readonly OrderReadRow[], now: string, blindness: Blindness) {
   return rows.flatMap((row) => {
-    const shown = presentOrderRow(row, now)
+    const shown = leaveOut(presentOrderRow(row, now), blindness)
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
     if (!isOpen || row.starts_at === null || row.doses === null) return []
     const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
-    const isBlind = (actor: Actor) => isBlindTo(row, now, actor)
-    return [{ row: shown, plan, secondCalculation: asksForSecond(row), isBlindTo: isBlind }]
+    return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
   })
 }
 
 export type OpenOrder = ReturnType<typeof openOrders>[number]
 
+export interface OrdersAtWork {
+  waiting: OrderWork[]
+  open: OpenOrder[]
+  /** Numbers of all orders, over ones too, whose amounts are left out for somebody. */
+  leftOutFor(actor: Actor): Set<string>
+}
+
 /**
  * What the worklist asks of orders, in one read: those with something to decide (drafts, proposals, held ones, those
  * whose doses nobody recorded in time), and the plans of the open ones.
  */
-export async function readOrderWork(
-  db: Db,
-  now: string,
-): Promise<{ waiting: OrderWork[]; open: OpenOrder[] }> {
+export async function readOrderWork(db: Db, now: string): Promise<OrdersAtWork> {
   const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
-  return { waiting: waitingOrders(rows, holds, now), open: openOrders(rows, now) }
+  const blindness = await readBlindness(db, rows, now, { areAll: true })
+  return {
+    waiting: waitingOrders(rows, holds, now, blindness),
+    open: openOrders(rows, now, blindness),
+    leftOutFor: (actor) =>
+      new Set(rows.filter((row) => blindness.isLeftOutFor(row.id, actor)).map((row) => row.number)),
+  }
 }
 
 function waitingOrders(
   rows: readonly OrderReadRow[],
   holds: readonly StandingHoldRow[],
   now: string,
+  blindness: Blindness,
 ): OrderWork[] {
   return rows.flatMap((row): OrderWork[] => {
-    const order = presentOrderRow(row, now)
+    const order = leaveOut(presentOrderRow(row, now), blindness)
     const waits = row.stage !== 'none' || order.phase === 'held' || order.phase === 'expired'
     if (!waits || order.phase === 'discontinued') return []
     const hold = order.phase === 'held' ? holds.find((one) => one.order_id === row.id) : undefined

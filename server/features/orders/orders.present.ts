@@ -127,7 +127,7 @@ export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
     agent: (content?.product.agent ?? row.agent) as OrderRow['agent'],
     problem: content?.fields.problem ?? draft?.problem ?? '',
     // beside a broken record stands no figure that somebody could dose by
-    amountText: isBroken || blindKeys(row, now).length > 0 ? null : (content?.amount.text ?? null),
+    amountText: isBroken ? null : (content?.amount.text ?? null),
     targetText: isBroken ? null : (content?.targetText ?? null),
     startsAt: courseOf(row)?.startsAt ?? draft?.startsAt ?? null,
     signedBy: signedText(row)?.signedBy?.printedName ?? row.signed_by_name,

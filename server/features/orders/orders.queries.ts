@@ -12,12 +12,12 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
-import { isBlindTo, mayBeSecond, withoutAmount } from './blind-order.ts'
+import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
 import { openOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
-import { blindKeys, plannedOf, presentOrderRow, readText } from './orders.present.ts'
+import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
 import {
   readEvents,
   readOrder,
@@ -92,7 +92,10 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     /** Every order that matches, sorted. */
     async find(query: Omit<QueryOf<typeof listOrders>, 'cursor' | 'limit'>): Promise<OrderRow[]> {
       const now = parts.now().toISOString()
-      const rows = (await readOrders(parts.dataSource, query)).map((row) => presentOrderRow(row, now))
+      const read = await readOrders(parts.dataSource, query)
+      const areAll = query.q === undefined && query.enclosureCode === undefined
+      const blindness = await readBlindness(parts.dataSource, read, now, { areAll })
+      const rows = read.map((row) => leaveOut(presentOrderRow(row, now), blindness))
       const { phase } = query
       const found = rows.filter((row) =>
         phase === undefined ? true : phase === 'open' ? !ended.has(row.phase) : row.phase === phase,
@@ -127,7 +130,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         })),
       )
       const now = parts.now().toISOString()
-      const isBlind = isBlindTo(row, now, actor)
+      const blindness = await readBlindness(parts.dataSource, [row], now, { areAll: false })
+      const isBlind = blindness.isLeftOutFor(row.id, actor)
       const shown = presentOrderRow(row, now)
       const inForce = sealed[0]
       return {
@@ -169,12 +173,12 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       }
     },
 
-    /** The doses whose amount somebody learns who is shown the order as it is; none where they may know it. */
+    /** The doses, of the order and of others like it, whose amount somebody learns who is shown that of the order. */
     async amountsToNote(number: string, actor: Actor) {
       const row = await rowOf(number)
       const now = parts.now().toISOString()
-      const keys = isBlindTo(row, now, actor) ? blindKeys(row, now) : []
-      return { orderId: row.id, versionId: row.version_id, keys }
+      const blindness = await readBlindness(parts.dataSource, [row], now, { areAll: false })
+      return blindness.learntFrom(row.id, actor)
     },
 
     /** Of some orders those whose amount is left out for somebody. */
@@ -182,7 +186,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       if (numbers.length === 0 || !mayBeSecond(actor)) return new Set()
       const now = parts.now().toISOString()
       const rows = await readOrdersNumbered(parts.dataSource, numbers)
-      return new Set(rows.filter((row) => isBlindTo(row, now, actor)).map((row) => row.number))
+      const blindness = await readBlindness(parts.dataSource, rows, now, { areAll: false })
+      return new Set(rows.filter((row) => blindness.isLeftOutFor(row.id, actor)).map((row) => row.number))
     },
 
     idOf: async (number: string): Promise<string> => (await rowOf(number)).id,
@@ -190,7 +195,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     /** Signed orders that are not ended, with their plan: what worklists ask. */
     async open() {
       const now = parts.now().toISOString()
-      return openOrders(await readOrders(parts.dataSource, {}), now)
+      const rows = await readOrders(parts.dataSource, {})
+      return openOrders(rows, now, await readBlindness(parts.dataSource, rows, now, { areAll: true }))
     },
 
     /** Holds and ends of an order, the newest first. */

@@ -35,10 +35,6 @@ export interface OrderReadRow {
   held: boolean
   ended: boolean
   done_keys: string[]
-  /** Whoever began or signed it, or had worked the same out before: all saw what it comes to. */
-  writers: (string | null)[]
-  /** Who knows the amount of which of its doses, under any of its versions: shown it, the first to work it out, or who recorded one. */
-  knowers: { personId: string; key: string }[]
   given: number
   /** A timed bath went in and has no end. */
   running: boolean
@@ -77,16 +73,6 @@ const columns = `
   EXISTS (SELECT 1 FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
            WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND x.contact_minutes IS NOT NULL
              AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)) AS running,
-  coalesce((SELECT json_agg(json_build_object('personId', k.person_id, 'key', k.dose_key)) FROM (
-     SELECT m.person_id, m.dose_key FROM dose_amounts_seen m JOIN order_versions x ON x.id = m.order_version_id
-      WHERE x.order_id = o.id
-      UNION SELECT l.recorded_by, l.dose_key FROM dose_calculations l JOIN order_versions x ON x.id = l.order_version_id
-             WHERE x.order_id = o.id AND l.part = 'first'
-      UNION SELECT d.recorded_by, d.dose_key FROM doses d JOIN order_versions x ON x.id = d.order_version_id
-             WHERE x.order_id = o.id AND d.amount_entered_value IS NOT NULL) k), '[]') AS knowers,
-  ARRAY(SELECT x.signed_by FROM order_versions x WHERE x.order_id = o.id
-        UNION SELECT o.created_by
-        UNION SELECT p.person_id FROM order_previewers p WHERE p.order_id = o.id) AS writers,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
 
@@ -123,24 +109,6 @@ export async function readOrder(db: Db, number: string): Promise<OrderReadRow | 
 
 export const readOrdersNumbered = (db: Db, numbers: readonly string[]): Promise<OrderReadRow[]> =>
   db.query(`SELECT ${columns} ${tables} WHERE o.number = ANY($1)`, [numbers])
-
-/** Orders for a drug in some enclosures with a dose to come: an amount worked out there is theirs as well. */
-export async function readNumbersLike(
-  db: Db,
-  { enclosureIds, agent }: { enclosureIds: readonly string[]; agent: string },
-): Promise<string[]> {
-  const rows: { number: string }[] = await db.query(
-    `SELECT DISTINCT o.number
-       FROM order_versions v JOIN orders o ON o.id = v.order_id
-      WHERE v.enclosure_id = ANY($1::uuid[]) AND v.agent = $2
-        AND NOT EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued')
-        AND (SELECT count(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
-              WHERE x.order_id = o.id) < v.doses
-      ORDER BY o.number`,
-    [enclosureIds, agent],
-  )
-  return rows.map(({ number }) => number)
-}
 
 export interface VersionReadRow {
   id: string

@@ -5,7 +5,7 @@ import { addDays } from '../../../shared/domain/time/facility-date.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { startOfFacilityDay } from '../../../shared/domain/time/local-time.ts'
 import type { Administrations, RecentDoseRow } from '../administrations/index.ts'
-import type { OpenOrder } from '../orders/index.ts'
+import type { OrdersAtWork } from '../orders/index.ts'
 import { doseParams } from './dose-params.ts'
 import { atHour, waiting, work } from './work.ts'
 import type { Moment } from './work.ts'
@@ -24,7 +24,7 @@ export interface GatheredDoses {
 /** Doses that are due, late or coming until the end of tomorrow; baths that go on; second calculations; exceptions. */
 export async function gatherDoses(
   administrations: Administrations,
-  open: readonly OpenOrder[],
+  { open, leftOutFor }: OrdersAtWork,
   moment: Moment,
 ): Promise<GatheredDoses> {
   const until = startOfFacilityDay(addDays(moment.on, 2), moment.zone)
@@ -34,10 +34,8 @@ export async function gatherDoses(
     administrations.work.recentDoses(since(exceptionsShownHours)),
     administrations.work.wantedSeconds(since(secondsShownHours)),
   ])
-  // what went in is what goes in next: it is left out for whoever may calculate another dose of the order blind
-  const blindOrders = new Set(
-    open.filter((order) => order.isBlindTo(moment.actor)).map(({ row }) => row.number),
-  )
+  // what went in is what goes in next: it is left out for whoever may calculate another dose of it blind
+  const blindOrders = leftOutFor(moment.actor)
   const recent = happened.map((row) =>
     blindOrders.has(row.number) ? { ...row, amount_entered_value: null, amount_entered_unit: null } : row,
   )

@@ -34,9 +34,9 @@ export function createTodayQueries(parts: TodayParts) {
   const { clock, facility, quarantine, orders, administrations } = parts
 
   async function gatherTanks(moment: Moment): Promise<GatheredDoses> {
-    const { waiting, open } = await orders.work()
-    const doses = await gatherDoses(administrations, open, moment)
-    return { ...doses, items: [...doses.items, ...gatherOrders(waiting, moment)] }
+    const work = await orders.work()
+    const doses = await gatherDoses(administrations, work, moment)
+    return { ...doses, items: [...doses.items, ...gatherOrders(work.waiting, moment)] }
   }
 
   async function gatherCases(moment: Moment): Promise<TodayWork[]> {
