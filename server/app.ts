@@ -1,6 +1,5 @@
 import express from 'express'
 import type { Express, RequestHandler } from 'express'
-import { rateLimit } from 'express-rate-limit'
 import session from 'express-session'
 import { pinoHttp } from 'pino-http'
 import type { Composition } from './composition.ts'
@@ -11,15 +10,12 @@ import { mountRoutes } from './platform/http/mount-routes.ts'
 import { checkOrigin } from './platform/http/origin-check.ts'
 import { openApiDocument } from './platform/http/openapi.ts'
 import { Problem } from './platform/http/problem.ts'
-import { createRateLimitStore } from './platform/http/rate-limit-store.ts'
 import { giveRequestId, requestIdOf } from './platform/http/request-id.ts'
 import { securityHeaders } from './platform/http/security-headers.ts'
 import { createSessionStore } from './platform/http/session-store.ts'
 import { problemEdge, unknownRoute } from './platform/http/to-problem.ts'
 
 const sessionHours = 8
-/** Sign-ins that fail from one address in a quarter of an hour, over all accounts: a whole house may stand behind one. */
-const failedSignInsPerAddress = 300
 
 export interface AppParts {
   config: Pick<Config, 'sessionSecret' | 'publicUrl' | 'mode'>
@@ -68,23 +64,6 @@ export function createApp({ config, composition, pages }: AppParts): { app: Expr
     }),
   )
   api.use(composition.authenticator.session())
-  api.post(
-    '/sign-in',
-    rateLimit({
-      windowMs: 15 * 60_000,
-      limit: failedSignInsPerAddress,
-      skipSuccessfulRequests: true,
-      store: createRateLimitStore(parts.dataSource, 'sign-in'),
-      standardHeaders: 'draft-8',
-      legacyHeaders: false,
-      handler: () => {
-        throw new Problem('too-many-requests', {
-          detail: 'Too many sign-ins from this address failed. Wait 15 min.',
-          extra: { retry_after_seconds: 900 },
-        })
-      },
-    }),
-  )
   api.get('/openapi.json', (req, res) => {
     if (!personOf(req)) throw new Problem('not-signed-in')
     res.json(openApiDocument())

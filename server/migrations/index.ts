@@ -21,6 +21,7 @@ import { MarksByKey1764600000035 } from './0035-marks-by-key.ts'
 import { AmountsPreviewed1764600000036 } from './0036-amounts-previewed.ts'
 import { RowsAsWritten1764600000037 } from './0037-rows-as-written.ts'
 import { AmountsLearnt1764600000038 } from './0038-amounts-learnt.ts'
+import { SignInsOfAnAddress1764600000039 } from './0039-sign-ins-of-an-address.ts'
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
@@ -49,5 +50,6 @@ export const migrations = [
   AmountsPreviewed1764600000036,
   RowsAsWritten1764600000037,
   AmountsLearnt1764600000038,
+  SignInsOfAnAddress1764600000039,
   RowMarkLookup1764600000040,
 ]

@@ -12,7 +12,6 @@ export type TableKind = 'draft' | 'sealed' | 'ledger' | 'projection' | 'plumbing
 export const tableKinds: Record<string, TableKind> = {
   migrations: 'ledger',
   session: 'plumbing',
-  rate_limits: 'plumbing',
   command_keys: 'plumbing',
   record_requests: 'ledger',
   counters: 'plumbing',

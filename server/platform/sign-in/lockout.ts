@@ -9,6 +9,10 @@ export const triesBeforeLock = 5
 /** Wrong tries in a row at one account from all addresses together: more than a house makes, fewer than guessing needs. */
 export const triesBeforeLockAnywhere = 50
 export const lockMinutes = 15
+/** Wrong tries at one address over all accounts from which on it is slowed: a whole house may stand behind one. */
+export const triesBeforeSlow = 300
+/** Wrong tries in a row at one account from an address that is slowed. */
+export const triesBeforeLockWhereSlow = 2
 
 /** What is tried: an account, whether or not it exists, from an address. */
 export interface Tried {
@@ -25,7 +29,7 @@ export interface Lockout {
    *
    * @param check what the password opens; null when it was wrong
    * @param sayLocked the words of the refusal while it is locked
-   * @refuses sign-in-locked
+   * @refuses sign-in-locked, too-many-requests (it was wrong, and the address is slowed)
    */
   attempt<T>(
     tried: Tried,
@@ -39,7 +43,9 @@ const triesLock = 5_150_001
 
 /**
  * Five wrong tries in a row lock an account for 15 minutes after the last of them, for the address they came from: whoever
- * guesses from elsewhere does not lock out the person at the tank.
+ * guesses from elsewhere does not lock out the person at the tank. An address from which many accounts are guessed at is
+ * slowed, never shut: nobody may keep a house from its records. Each account then takes fewer wrong tries from there, and
+ * passwords are looked at one after another; the right one still opens.
  */
 export function createLockout(parts: { dataSource: DataSource; clock: Clock }): Lockout {
   const inTurn = createTurns()
@@ -63,9 +69,25 @@ export function createLockout(parts: { dataSource: DataSource; clock: Clock }): 
     return Math.ceil((lastAt.getTime() + lockMinutes * 60_000 - now.getTime()) / 60_000)
   }
 
-  const minutesLocked = async ({ emailKey, address }: Tried, db: Db = parts.dataSource) =>
+  /** A try that was right was counted as wrong before, and once more as right. The forms of who is signed in have no address. */
+  async function isSlowed(db: Db, address: string): Promise<boolean> {
+    if (address === '') return false
+    const since = new Date(parts.clock.now().getTime() - lockMinutes * 60_000)
+    const [row]: { wrong: number }[] = await db.query(
+      `SELECT (count(*) FILTER (WHERE NOT succeeded) - count(*) FILTER (WHERE succeeded))::int AS wrong
+         FROM sign_in_tries WHERE address = $1 AND tried_at > $2`,
+      [address, since],
+    )
+    return (row?.wrong ?? 0) >= triesBeforeSlow
+  }
+
+  const minutesLocked = async (
+    { emailKey, address }: Tried,
+    slowed: boolean,
+    db: Db = parts.dataSource,
+  ): Promise<number> =>
     Math.max(
-      await minutesAfter(db, triesBeforeLock, emailKey, address),
+      await minutesAfter(db, slowed ? triesBeforeLockWhereSlow : triesBeforeLock, emailKey, address),
       await minutesAfter(db, triesBeforeLockAnywhere, emailKey, null),
     )
 
@@ -77,27 +99,33 @@ export function createLockout(parts: { dataSource: DataSource; clock: Clock }): 
   }
 
   /** Counts a try as wrong until it is known to be right. Minutes of the lock, and nothing counted, while it is locked. */
-  const reserve = (tried: Tried): Promise<number> =>
+  const reserve = (tried: Tried, slowed: boolean): Promise<number> =>
     parts.dataSource.transaction(async (manager) => {
       await manager.query('SELECT pg_advisory_xact_lock($1, hashtext($2))', [triesLock, tried.emailKey])
-      const minutes = await minutesLocked(tried, manager)
+      const minutes = await minutesLocked(tried, slowed, manager)
       if (minutes === 0) await note(manager, tried, false)
       return minutes
     })
 
   return {
-    minutesLocked: (tried) => minutesLocked(tried),
+    minutesLocked: async (tried) => minutesLocked(tried, await isSlowed(parts.dataSource, tried.address)),
     // One after another in this process: people who sign in rightly at the same moment do not count against each other
     attempt: (tried, check, sayLocked) =>
       inTurn(`${tried.emailKey} ${tried.address}`, async () => {
-        const minutes = await reserve(tried)
+        const slowed = await isSlowed(parts.dataSource, tried.address)
+        const minutes = await reserve(tried, slowed)
         if (minutes > 0)
           throw new Problem('sign-in-locked', {
             detail: sayLocked(minutes),
             extra: { retry_after_seconds: minutes * 60 },
           })
-        const found = await check()
+        const found = slowed ? await inTurn(`slowed ${tried.address}`, check) : await check()
         if (found !== null) await note(parts.dataSource, tried, true)
+        else if (slowed)
+          throw new Problem('too-many-requests', {
+            detail: `E-mail and password do not fit. Many sign-ins failed at this address, for instance in the network of one house. The right password still opens each account; ${String(triesBeforeLockWhereSlow)} wrong ones lock it here for ${String(lockMinutes)} minutes.`,
+            extra: { retry_after_seconds: lockMinutes * 60 },
+          })
         return found
       }),
   }
