@@ -1,4 +1,5 @@
 import type { Breathing, CountBasis, Feeding, SignCode, Skin } from '../domain/observations/observation.ts'
+import { capital } from './capital.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 export const feedingWords = defineMessages({
@@ -74,7 +75,7 @@ export function sayObservation(said: Said): string[] {
   if (said.feeding !== null) parts.push(feedingWords[said.feeding])
   if (said.breathing !== null) parts.push(breathingWords[said.breathing])
   if (said.skin !== null) parts.push(skinWords[said.skin])
-  if (said.signs.length > 0) parts.push(said.signs.map((sign) => signWords[sign]).join(', '))
+  if (said.signs.length > 0) parts.push(capital(said.signs.map((sign) => signWords[sign]).join(', ')))
   if (count?.basis === 'counted')
     parts.push(observationSentences.countedSome({ animals: counted(count.low ?? 0, 'animal', 'animals') }))
   else if (count?.basis === 'estimated')

@@ -8,6 +8,7 @@ import type { TodayKind } from '../domain/today/today-kinds.ts'
 import type { Instant, Zone } from '../domain/time/instant.ts'
 import { facilityDateOf } from '../domain/time/facility-date.ts'
 import { discrepancySentences } from './animal-log.ts'
+import { capital } from './capital.ts'
 import { counted, defineMessages } from './define-messages.ts'
 import { agentNames } from './formulary.ts'
 import { breathingWords, feedingWords, skinWords } from './observations.ts'
@@ -28,8 +29,6 @@ interface Told {
 
 type Say = (told: Told) => string
 
-/** A title begins with a capital, also where a drug's name does not. */
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
 const beside = (...words: (string | false)[]) => words.filter(Boolean).join(', ')
 const dayOf = (t: Told) => t.has('day') && `day ${t.text('day')} of ${t.text('required')}`
 const caseWords = (t: Told) => `${t.text('case')} ${t.text('name')}`

@@ -15,6 +15,7 @@ import {
   sexNames,
   stageNames,
 } from '../../../shared/messages/animals.ts'
+import { capital } from '../../../shared/messages/capital.ts'
 import { roleNames } from '../../../shared/messages/permissions.ts'
 
 type Catalogue = Readonly<Record<string, unknown>>
@@ -106,5 +107,3 @@ export function sayLogLine(line: Pick<LogLine, 'kind' | 'facts'>): string {
       return line.kind
   }
 }
-
-const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)

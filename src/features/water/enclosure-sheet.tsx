@@ -4,6 +4,7 @@ import { Link } from 'react-router-dom'
 import { Pencil, Plus } from 'lucide-react'
 import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { capital } from '../../../shared/messages/capital.ts'
 import { enclosureKindNames } from '../../../shared/messages/enclosures.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
@@ -24,8 +25,6 @@ import { orderedWaters } from './ordered-waters.ts'
 import { ReadingsPane } from './readings-pane.tsx'
 import { ValveRows } from './valve-rows.tsx'
 import { Worksheet } from './worksheet.tsx'
-
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)
 
 /**
  * An enclosure: who and what it is, the volume to dose by with its worksheet, the water that it shares now, its

@@ -9,6 +9,9 @@ import type { PassageView } from './passage-view.ts'
 const roomOneLine = 125
 const roomTwoLines = 82
 
+/** Half of what a step takes along its course. */
+const fixRadiusPx = 8
+
 /** On the land of a board row: the date of earliest clearance and how far away it is; or why nothing is set. */
 export function HarbourLabel({
   view,
@@ -39,11 +42,15 @@ export function HarbourLabel({
   const date = shortDay(view.harbour.on)
   const words = harbourWords(view)
   const colour = view.harbour.allMet && x <= course.nowX + 0.5 && 's-g'
-  const tooNear = x + 20 + (oneLine ? roomOneLine : roomTwoLines) - 20 > width
+  const room = (oneLine ? roomOneLine : roomTwoLines) - 20
+  // where the line of now would run through the words, or a step of today lies upon them, they stand behind it
+  const crossed = x + 20 - fixRadiusPx < course.nowX && course.nowX < x + 20 + room
+  const start = crossed ? course.nowX + fixRadiusPx + 4 : x + 20
+  const tooNear = start + room > width
   if (oneLine || tooNear) {
     // near the edge: over the course and left of the anchor
     return (
-      <text x={tooNear ? x - 8 : x + 20} y={tooNear ? y - 10 : y + 4} className={tooNear ? 'end' : undefined}>
+      <text x={tooNear ? x - 8 : start} y={tooNear ? y - 10 : y + 4} className={tooNear ? 'end' : undefined}>
         <tspan className={classNames('s-13 s-b', colour)}>{date}</tspan>
         <tspan className="s-11 s-n s-2" dx="6">
           {words}
@@ -53,10 +60,10 @@ export function HarbourLabel({
   }
   return (
     <>
-      <text x={x + 20} y={y - 1} className={classNames('s-13 s-b', colour)}>
+      <text x={start} y={y - 1} className={classNames('s-13 s-b', colour)}>
         {date}
       </text>
-      <text x={x + 20} y={y + 13} className="s-11 s-n s-2">
+      <text x={start} y={y + 13} className="s-11 s-n s-2">
         {words}
       </text>
     </>
