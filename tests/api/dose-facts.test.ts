@@ -56,7 +56,7 @@ describe('a dose whose animals have left the water', () => {
     expect(sheet.body.mayStart).toBe(false)
     expect(sheet.body.why.join(' ')).toContain(sentence)
     expect(sheet.body.treated.join().replaceAll('\u00a0', ' ')).toBe(
-      '14 animals, Yellow tang (no longer in this water)',
+      `Yellow tang, 14 animals, ${bath.school.accession} (no longer in this water)`,
     )
     const first = await house.calculateFirst(number)
     expect(first.body).toMatchObject({ code: 'dose-not-possible' })

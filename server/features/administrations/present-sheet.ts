@@ -1,4 +1,5 @@
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import { sayTreated } from '../orders/index.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import type { ResolveCode } from '../../../shared/domain/cautions/caution-code.ts'
 import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
@@ -344,9 +345,9 @@ function saidTreated({ content, treated }: DoseSituation): string[] {
   const gone = new Set(treated.filter(({ isHere }) => isHere === false).map(({ animalId }) => animalId))
   return content.water.animals
     .filter((animal) => animal.treated)
-    .map(({ animalId, countText, commonName }) => {
-      const said = `${countText}, ${commonName}`
-      return gone.has(animalId) ? doseWords.noLongerHere({ animals: said }) : said
+    .map((animal) => {
+      const said = sayTreated(animal)
+      return gone.has(animal.animalId) ? doseWords.noLongerHere({ animals: said }) : said
     })
 }
 

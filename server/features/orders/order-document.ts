@@ -19,6 +19,7 @@ import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.t
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { RecordedDoseRow } from './orders.reads.ts'
+import { sayTreated } from './say-order.ts'
 
 export interface OrderPaper {
   /** What was signed; the columns beside it where the text was changed. */
@@ -296,10 +297,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       source: usesMicrolitres ? orderPaper.sourceMicrolitres : orderPaper.source,
       subject: {
         name: content.enclosure.code,
-        lines: [
-          content.enclosure.name,
-          ...treated.slice(0, 3).map((animal) => `${animal.countText}, ${animal.commonName}`),
-        ],
+        lines: [content.enclosure.name, ...treated.slice(0, 3).map(sayTreated)],
       },
     },
     signers: [signerLine(block)],

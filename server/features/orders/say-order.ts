@@ -85,3 +85,7 @@ const tidy = (value: number) => Number(value.toPrecision(significantDigits))
 function saidRange({ low, high }: { low: number; high: number }, unit: 'g' | 'mL'): string {
   return formatDoseRange(tidy(low), tidy(high), unit, orderWords.between).text
 }
+
+/** Who is treated: several of one kind are told apart by their numbers. */
+export const sayTreated = (animal: { commonName: string; countText: string; accession: string }): string =>
+  `${animal.commonName}, ${animal.countText}, ${animal.accession}`

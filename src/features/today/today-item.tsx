@@ -7,6 +7,7 @@ import { shortDay } from '../../ui/day-words.ts'
 import { FlagMark } from '../../ui/flag-mark.tsx'
 import { StepPicture } from '../../ui/step-mark.tsx'
 import type { StepState } from '../../ui/step-mark.tsx'
+import { WholeCodes } from '../../ui/whole-codes.tsx'
 import { addressOfWork } from './address-of.ts'
 import { TodayActs } from './today-acts.tsx'
 import { lateText } from './today-model.ts'
@@ -40,13 +41,13 @@ export function TodayItem({ item, at, zone }: { item: TodayWork; at: string; zon
       </span>
       <div className="today-words">
         <Link to={addressOfWork(item)} className="today-title">
-          {title}
+          <WholeCodes>{title}</WholeCodes>
         </Link>
         {note === '' ? null : (
           <span className="today-note">
             {inQuarantine.has(item.kind) ? <FlagMark flag="Q" /> : null}
             {item.kind === 'case-held' ? <FlagMark flag="L" /> : null}
-            {note}
+            <WholeCodes>{note}</WholeCodes>
           </span>
         )}
       </div>

@@ -77,7 +77,8 @@ export function viewToday(
   const own = lanesOf(given.roles)
   const open = items.filter(({ state }) => state !== 'done' && state !== 'coming')
   const mine = open.filter((item) => own.includes(laneOf(item)))
-  const isLate = ({ state }: TodayWork) => state === 'late'
+  // an urgent call says itself since when; the band of what is late has it not
+  const isLate = (item: TodayWork) => item.state === 'late' && laneOf(item) !== 'urgent'
   return {
     lanes,
     chosen: chosen[0] ?? null,

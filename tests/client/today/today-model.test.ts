@@ -69,8 +69,8 @@ describe('the sheet', () => {
     expect(view.done).toEqual([done])
     expect(view.bands.flatMap(({ cells }) => cells.flatMap(({ items }) => items))).not.toContain(call)
   })
-  it('counts what waits for this person, urgent calls with it, and what is late elsewhere', () => {
-    expect(view).toMatchObject({ waits: 2, waitsLate: 1, othersLate: 1, empty: false })
+  it('counts what waits for this person, urgent calls with it, and what is late in the bands', () => {
+    expect(view).toMatchObject({ waits: 2, waitsLate: 0, othersLate: 1, empty: false })
   })
   it('says that a day is clear when nothing is left, also after a busy one', () => {
     expect(viewToday([], vet).empty).toBe(true)
