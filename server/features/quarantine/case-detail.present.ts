@@ -21,7 +21,7 @@ export interface CaseExtras {
   estimates: Estimates
   openDiscrepancies: number
   protocolConfirmed: boolean
-  /** Signature blocks by the id of the signed text. */
+  /** Signature blocks by the id of the signed event. */
   signatures: ReadonlyMap<string, SignatureBlock>
   /** What was signed at clearance; null until then. */
   cleared: { against: number; reason: string | null } | null
@@ -116,7 +116,7 @@ export function presentDeaths(
         accession,
         finding: said?.finding ?? 'unexplained',
         cause: said?.cause ?? null,
-        signature: signatures.get(signed?.signed_text_id ?? '') ?? null,
+        signature: signatures.get(signed?.id ?? '') ?? null,
       }
     })
 }
@@ -201,6 +201,6 @@ export function presentCase(facts: ClockFacts, head: CaseReadRow, extras: CaseEx
   return readsClinical(extras.roles) ? detail : withholdFromCase(detail)
 
   function signatureOf(event: CaseEventReadRow | undefined): SignatureBlock | null {
-    return extras.signatures.get(event?.signed_text_id ?? '') ?? null
+    return extras.signatures.get(event?.id ?? '') ?? null
   }
 }

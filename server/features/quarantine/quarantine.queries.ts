@@ -28,7 +28,7 @@ import { readProtocolVersions } from './protocols.reads.ts'
 import { isLive, readClocks } from './read-clocks.ts'
 import type { ClockFacts, WantedCases } from './read-clocks.ts'
 import { withholdFromRow } from './withhold-clinical.ts'
-import { readSignedEvent } from './read-signed-event.ts'
+import { mustBeSigned, readSignedEvent } from './read-signed-event.ts'
 
 type Board = ReplyOf<typeof contracts.listCases>
 export type BoardQuery = QueryOf<typeof contracts.listCases>
@@ -117,12 +117,12 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const facts = await clocksOf([id], asOf)
       const head = facts.cases.find((one) => one.id === id)
       if (!head) throw new Problem('not-found')
-      const own = facts.events.filter((row) => row.case_id === id && row.signed_text_id !== null)
+      const own = facts.events.filter((row) => row.case_id === id && mustBeSigned(row))
       const signatures = new Map()
       let cleared = null
       for (const event of own) {
         const { block, clearance } = await readSignedEvent(parts.signing, head, event)
-        signatures.set(event.signed_text_id, block)
+        signatures.set(event.id, block)
         if (event.kind === 'cleared')
           cleared = { against: clearance?.unmet.length ?? 0, reason: clearance?.reason ?? null }
       }

@@ -39,6 +39,12 @@ function fits(head: Pick<CaseReadRow, 'id' | 'number'>, event: CaseEventReadRow,
   )
 }
 
+const signedKinds = new Set(['cleared', 'death-cause-signed'])
+
+/** Whether an event is one that a signature stands under, also where nothing points at it any more. */
+export const mustBeSigned = (event: CaseEventReadRow): boolean =>
+  signedKinds.has(event.kind) || event.signed_text_id !== null
+
 /** Of an event that was signed and points at nothing any more. */
 const noText = '00000000-0000-0000-0000-000000000000'
 

@@ -1,7 +1,7 @@
 import type { Db } from '../../platform/database/db.ts'
 import type { SigningService } from '../signing/index.ts'
 import { readCaseEvents, readCases, readLooseCaseTexts } from './case-facts.reads.ts'
-import { readSignedEvent } from './read-signed-event.ts'
+import { mustBeSigned, readSignedEvent } from './read-signed-event.ts'
 
 /** A signed clearance, or a signed cause of a death, that is not what was signed. */
 export interface SignedEventFault {
@@ -10,8 +10,6 @@ export interface SignedEventFault {
   what: 'signature'
   detail: string
 }
-
-const signedKinds = new Set(['cleared', 'death-cause-signed'])
 
 /** Checks every signature under a case: the text against its seal, and the row of the event against the text. */
 export async function verifySignedEvents(
@@ -25,7 +23,7 @@ export async function verifySignedEvents(
   let signatures = 0
   for (const event of events) {
     const head = byId.get(event.case_id)
-    if (!head || !(signedKinds.has(event.kind) || event.signed_text_id !== null)) continue
+    if (!head || !mustBeSigned(event)) continue
     signatures += 1
     const { block } = await readSignedEvent(signing, head, event)
     if (block.state !== 'intact')
