@@ -41,7 +41,7 @@ export const sheetWords = defineMessages({
   amountLater:
     'The amount is shown to whoever makes the first calculation, and to everybody once the two agree.',
   recordedLeftOut:
-    'The amounts are left out here: you may still calculate a dose of this order blind. Whoever looks at them is remembered, and somebody else has to do it.',
+    'The amounts are left out here: you may still calculate a dose of this drug in this water blind. Whoever looks at them is remembered, and somebody else has to do it.',
   showRecorded: 'Show the amounts',
   amountNone: 'No amount can be worked out for the water as it is now.',
   noDrift: 'The volume is the one of the signature.',

@@ -43,7 +43,9 @@ export const doseWords = defineMessages({
     `Calculated alone by ${p.by}, repeated after ${String(p.minutes)} min.`,
   calculatedAloneText: (p: { calculated: string }) =>
     `${p.calculated} Nobody else could be reached. It was worked out again from label, mark and container. A veterinarian reviews it.`,
-  amountLeftOut: 'The amounts are left out here: you may still calculate a dose of this order blind.',
+  amountLeftOut:
+    'The amounts are left out here: you may still calculate a dose of this drug in this water blind.',
+  amountLeftOutHere: '(amount left out: you may still calculate it blind; the order shows it)',
   amountSeen:
     'You have been shown the amount of this dose or signed the order, so your calculation would not be blind. Ask somebody who has not seen it.',
   beginAgain: 'The first is worked out anew before the second. Then both begin again from the label.',

@@ -133,7 +133,7 @@ export const orderViewWords = defineMessages({
   noCautions: 'No caution fired.',
   secondPerson: 'Asks for a second calculation by another person.',
   amountWithheld:
-    'The amount is left out here: another person than the first works it out blind before each dose, and that may be you. Whoever looks at it is remembered.',
+    'The amount is left out here: another person than the first works it out blind before each dose of this drug in this water, and that may be you. Whoever looks at it is remembered.',
   showAmount: 'I do not calculate second: show the amount',
   overridden: (p: { name: string; reason: string }) => `Overridden by ${p.name}, reason: ${p.reason}`,
   wasRead: (p: { name: string }) => `Read by ${p.name}`,

@@ -111,7 +111,7 @@ export const auditWords = defineMessages({
   record: 'Record',
   change: 'Change',
   withheld: 'Clinical text withheld',
-  amountLeftOut: 'The amount is left out: you may still calculate a dose of this order blind.',
+  amountLeftOut: 'The amount is left out: you may still calculate a dose of this drug in this water blind.',
   show: 'Show the change',
   before: 'Before',
   after: 'After',

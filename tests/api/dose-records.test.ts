@@ -78,7 +78,11 @@ describe('a dose that was not given', () => {
 
 describe('an order of several baths', () => {
   it('is in progress while one of them runs past its last window, and not expired', async () => {
-    const number = await house.signedBath(await house.tankWithSchool(), { doses: 3, intervalHours: 1 })
+    const number = await house.signedBath(await house.tankWithSchool(), {
+      doses: 3,
+      intervalHours: 1,
+      contactMinutes: 20,
+    })
     await house.record(number).expect(201)
     api.clock.set(new Date('2026-12-01T23:00:00Z'))
     const listed = await house.technician.agent.get(`/api/orders?q=${number}`).expect(200)
@@ -153,9 +157,9 @@ describe('what was recorded under one order tells the amount of the next for tha
     bath = await house.tankWithSchool()
     over = await house.signedBath(bath)
   })
-  const isEnded = async () => {
+  const isEnded = async (given: object = {}) => {
     const dose = api.nextId()
-    await house.record(over, { id: dose }).expect(201)
+    await house.record(over, { id: dose, ...given }).expect(201)
     await stopBath(dose, '2026-12-01T18:20:00Z').expect(201)
   }
   const next = (given: object = {}) => house.signedBath(bath, given)
@@ -212,6 +216,41 @@ describe('what was recorded under one order tells the amount of the next for tha
     expect(await trail()).not.toMatch(shows)
     await other.agent.get(`/api/orders/${number}?amounts=yes`).expect(200)
     expect(await trail()).toMatch(shows)
+  })
+
+  it('so a discrepancy of it names no amount to them, on the animal, on the worklist and in the trail', async () => {
+    const other = await api.person({
+      email: 'vet3@harrow-point.example',
+      printedName: 'Third veterinarian',
+      // the whole trail is open to them
+      roles: ['veterinarian', 'administrator'],
+    })
+    const veterinarian = await api.as('veterinarian')
+    await isEnded({ amount: { value: '2.18', unit: 'L' } })
+    const places = [`/api/animals/${bath.school.accession}`, '/api/discrepancies?state=open&limit=50']
+    const amounts = /218[ \u00a0]?mL|2\.18[ \u00a0]?L/
+    const about = async (by: TestPerson, path: string) => {
+      const body = JSON.parse(await read(by, path))
+      const found = (body.discrepancies ?? body.rows ?? body.items) as object[]
+      const own = found.filter((one) => JSON.stringify(one).includes(over))
+      expect(own.length, path).toBeGreaterThan(0)
+      return JSON.stringify(own)
+    }
+    for (const path of places) expect(await about(other, path)).toMatch(amounts)
+    await next()
+    for (const path of [...places, '/api/today']) {
+      expect(await about(other, path), path).not.toMatch(amounts)
+      expect(await about(veterinarian, path), path).toMatch(amounts)
+    }
+    const { discrepancies } = JSON.parse(await read(veterinarian, places[0] ?? ''))
+    await veterinarian.agent
+      .post(`/api/discrepancies/${String(discrepancies[0].id)}/resolution`)
+      .set('Idempotency-Key', newKey())
+      .send({ outcome: 'explained', reason: 'read from the wrong line of the balance' })
+      .expect(200)
+    const trail = `/api/audit?q=${bath.school.accession}`
+    expect(await about(veterinarian, trail)).toMatch(amounts)
+    expect(await about(other, trail)).not.toMatch(amounts)
   })
 
   it('so nobody is asked who learnt it there within a month, except who had worked it out blind', async () => {

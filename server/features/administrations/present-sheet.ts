@@ -272,7 +272,8 @@ export function presentSheet(request: SheetRequest): BathSheet {
   const first = firstOf(calculations)
   const own = records.filter((record) => record.dose_key === planned.key)
   const isOpen = own.length === 0
-  const hide = blind && (isOpen ? !secondStands(calculations) : request.mayBeSecondElsewhere)
+  const isToCome = isOpen && situation.row.phase !== 'discontinued' && situation.row.phase !== 'expired'
+  const hide = blind && (isToCome ? !secondStands(calculations) : request.mayBeSecondElsewhere)
   const hideLot = hide && isOpen && first !== undefined
   const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
   const calendar = presentCalendar(situation.plan, records, course, now)

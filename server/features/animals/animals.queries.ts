@@ -21,6 +21,8 @@ import type { DiscrepanciesFilter } from './chart.reads.ts'
 import { readLog } from './log.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 import type { TaxaFilter } from './taxa.reads.ts'
+import type { Actor } from '../../platform/http/request-context.ts'
+import type { AmountsLeftOut } from './amounts-left-out.ts'
 import * as withhold from './withhold-clinical.ts'
 
 export interface Found<T> {
@@ -29,8 +31,8 @@ export interface Found<T> {
 }
 
 /** What screens and files ask of animals. */
-export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
-  const { dataSource: db, clock } = parts
+export function createAnimalQueries(parts: { dataSource: Db; clock: Clock; amounts: AmountsLeftOut }) {
+  const { dataSource: db, clock, amounts } = parts
   const present = () => clock.now()
 
   async function rowOf(accession: string) {
@@ -45,7 +47,8 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
       return { rows: rows.map(show.presentAnimalRow), total: rows[0]?.total ?? 0 }
     },
 
-    async animal(accession: string, roles: readonly Role[]): Promise<Animal> {
+    async animal(accession: string, actor: Actor): Promise<Animal> {
+      const { roles } = actor
       const row = await rowOf(accession)
       const [ties, identifiers, locks, discrepancies, taxa] = await Promise.all([
         chart.readAnimalTies(db, row.id),
@@ -55,7 +58,8 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
         readTaxa(db, { ids: [row.taxon_id] }),
       ])
       const taxon = taxa[0]
-      const shown = show.presentAnimal({ row, ties, identifiers, locks, discrepancies, taxon }, roles)
+      const whole = show.presentAnimal({ row, ties, identifiers, locks, discrepancies, taxon }, roles)
+      const shown = { ...whole, discrepancies: await amounts.from(whole.discrepancies, actor) }
       return readsClinical(roles) ? shown : withhold.withholdFromAnimal(shown)
     },
 
@@ -130,11 +134,11 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock }) {
       }
     },
 
-    async discrepancies(filter: DiscrepanciesFilter, roles: readonly Role[]): Promise<Found<Discrepancy>> {
+    async discrepancies(filter: DiscrepanciesFilter, actor: Actor): Promise<Found<Discrepancy>> {
       const rows = await chart.readDiscrepancies(db, filter)
-      const shown = rows.map(show.presentDiscrepancy)
+      const shown = await amounts.from(rows.map(show.presentDiscrepancy), actor)
       return {
-        rows: readsClinical(roles) ? shown : shown.map(withhold.withholdFromDiscrepancy),
+        rows: readsClinical(actor.roles) ? shown : shown.map(withhold.withholdFromDiscrepancy),
         total: rows[0]?.total ?? 0,
       }
     },

@@ -19,9 +19,7 @@ export function animalRoutes(queries: AnimalQueries, clock: Clock): Route[] {
       const { rows } = await queries.animals({ ...query, state: query.state ?? 'here' })
       return csvReply('animals.csv', animalCsvColumns(), rows)
     }),
-    route(contracts.getAnimal, ({ params, context }) =>
-      queries.animal(params.accession, context.actor.roles),
-    ),
+    route(contracts.getAnimal, ({ params, context }) => queries.animal(params.accession, context.actor)),
     route(contracts.listInhabitants, async ({ params, query }) => {
       const at = query.at === undefined ? undefined : new Date(query.at)
       return {
@@ -43,7 +41,7 @@ export function animalRoutes(queries: AnimalQueries, clock: Clock): Route[] {
     }),
     route(contracts.listDiscrepancies, async ({ query, context }) => {
       const page = pageOf(query)
-      const { rows, total } = await queries.discrepancies({ ...query, ...page }, context.actor.roles)
+      const { rows, total } = await queries.discrepancies({ ...query, ...page }, context.actor)
       return { rows, total, nextCursor: nextCursorOf(page, total) }
     }),
   ]

@@ -17,6 +17,7 @@ import {
   MovementLockLiftRow,
   MovementLockRow,
 } from './animal-watch.entity.ts'
+import { createAmountsLeftOut } from './amounts-left-out.ts'
 import { createAnimalQueries } from './animals.queries.ts'
 import { createAnimalQuestions } from './animals.questions.ts'
 import { animalRoutes } from './animals.routes.ts'
@@ -25,6 +26,7 @@ import { taxaRoutes } from './taxa.routes.ts'
 import { Taxon, TaxonSensitivity, TaxonWeightBand } from './taxon.entity.ts'
 
 export type { Accession, CountChange } from './accession.service.ts'
+export { amountFacts } from './amounts-left-out.ts'
 export type { AnimalFacts, AnimalQuestions } from './animals.questions.ts'
 export type { AnimalsService } from './animals.service.ts'
 export type { LockSource } from './locks.service.ts'
@@ -54,10 +56,12 @@ export const animalEntities = [
 export function createAnimals(given: Parts & { facility: FacilityService; water: Water }) {
   const parts = { ...given, water: given.water.questions }
   const service = createAnimalsService(parts)
-  const queries = createAnimalQueries(parts)
+  const amounts = createAmountsLeftOut()
+  const queries = createAnimalQueries({ ...parts, amounts })
   return {
     service,
     queries,
+    amounts,
     questions: createAnimalQuestions(parts),
     routes: [
       ...animalRoutes(queries, parts.clock),

@@ -1,4 +1,5 @@
 import type { AuditEntry } from '../../../shared/contracts/audit.contract.ts'
+import { amountFacts } from '../animals/index.ts'
 import type { AuditRow } from './audit.reads.ts'
 
 /** What of an entry its reader is not to see. */
@@ -13,9 +14,21 @@ export interface LeftOut {
 export const isOfDose = ({ subject_kind, action }: AuditRow): boolean =>
   subject_kind === 'order' && action.startsWith('dose.')
 
+/** The order whose amount an entry names: that of a dose, or of a discrepancy that a dose opened. */
+export function orderNamedBy(row: AuditRow): string | null {
+  if (isOfDose(row)) return row.subject_label
+  if (!row.action.startsWith('discrepancy.')) return null
+  const { before, after } = JSON.parse(row.text) as { before?: Facts | null; after?: Facts | null }
+  const order = after?.['order'] ?? before?.['order']
+  return typeof order === 'string' ? order : null
+}
+
+type Facts = Record<string, unknown>
+const amounts = ['amount', ...amountFacts]
+
 function withoutAmount(said: unknown): unknown {
   if (typeof said !== 'object' || said === null) return said ?? null
-  return Object.fromEntries(Object.entries(said).filter(([name]) => name !== 'amount'))
+  return Object.fromEntries(Object.entries(said).filter(([name]) => !amounts.includes(name)))
 }
 
 /** An entry as the reader may see it. */

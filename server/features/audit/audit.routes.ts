@@ -4,7 +4,7 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
-import { isOfDose, presentAuditEntry } from './audit.present.ts'
+import { orderNamedBy, presentAuditEntry } from './audit.present.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { AuditFilter, AuditRow, AuditScope } from './audit.reads.ts'
 
@@ -40,15 +40,15 @@ export function auditRoutes({ read, blindAmong }: AuditQuestions): Route[] {
         limit,
       })
       const mayReadClinical = decide('chart.read', roles, {}).allowed
-      const doses = rows.filter(isOfDose).map((row) => row.subject_label)
-      const blind = await blindAmong([...new Set(doses)], context.actor)
+      const orders = rows.flatMap((row) => orderNamedBy(row) ?? [])
+      const blind = await blindAmong([...new Set(orders)], context.actor)
       const last = rows.at(-1)
       return {
         rows: rows.map((row) => {
           const isOwn = row.actor_id === personId
           return presentAuditEntry(row, {
             clinical: !mayReadClinical && !isOwn,
-            amount: !isOwn && isOfDose(row) && blind.has(row.subject_label),
+            amount: !isOwn && blind.has(orderNamedBy(row) ?? ''),
           })
         }),
         total,

@@ -88,6 +88,7 @@ export function createOrders(parts: OrdersOutside) {
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)
+  parts.animals.amounts.askOf(queries.blindAmong)
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
   const judge = (
     fields: BathOrderFields,

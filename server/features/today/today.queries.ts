@@ -93,7 +93,7 @@ export function createTodayQueries(parts: TodayParts) {
         sees('volume-to-confirm') ? gatherWater(parts.water.questions, moment) : none,
         seesLane('register') ? gatherRegister(parts, moment) : none,
         sees('discrepancy-veterinarian') || sees('discrepancy-registrar')
-          ? parts.animals.queries.discrepancies({ state: 'open', limit: mostFlagged }, actor.roles)
+          ? parts.animals.queries.discrepancies({ state: 'open', limit: mostFlagged }, actor)
           : { rows: [] },
         sees('bodies-veterinarian') || sees('bodies-registrar')
           ? quarantine.observationQueries.observations({ bodies: 'to-name', limit: mostFlagged })

@@ -22,7 +22,7 @@ const kindWords = (kind: RecordedDose['kind']) =>
   })[kind]
 
 /** Amounts of what was recorded are left out for whoever may calculate another dose. */
-const isLeftOut = ({ blind, state }: BathSheet) => blind && (state === 'running' || state === 'done')
+const isLeftOut = ({ blind, state }: BathSheet) => blind && ['running', 'done', 'ended'].includes(state)
 
 /** Everything recorded of this dose: what, when, by whom, how it ended, and what a veterinarian has to look at. */
 export function RecordedDoses({ sheet, zone }: { sheet: BathSheet; zone: string }) {

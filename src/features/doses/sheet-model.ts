@@ -19,8 +19,8 @@ export function sheetMode(blind: BathSheet, part: SheetPart): 'blind' | 'whole' 
     if (blind.first === null) return 'same'
     if (blind.secondShut === null || blind.secondShut === 'begin-again') return 'blind'
   }
-  // what was recorded needs no amount to be looked at, or to be stopped
-  if (part !== 'whole' && (blind.state === 'running' || blind.state === 'done')) return 'same'
+  // what is recorded, or not to be given any more, needs no amount to be looked at, or to be stopped
+  if (part !== 'whole' && ['running', 'done', 'ended'].includes(blind.state)) return 'same'
   return 'whole'
 }
 

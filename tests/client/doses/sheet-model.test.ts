@@ -150,6 +150,10 @@ describe('whether somebody is shown amounts', () => {
   it('needs no second reading where the server left nothing out', () => {
     expect(sheetMode(sheet({ first, second }), null)).toBe('same')
   })
+  it('fetches them for nobody of a dose that is not given any more: they may be those of another order', () => {
+    expect(sheetMode(blind({ state: 'ended' }), null)).toBe('same')
+    expect(sheetMode(blind({ state: 'ended' }), 'whole')).toBe('whole')
+  })
   it('looks again by itself while somebody waits for the first calculation', () => {
     expect(waitsForOthers(blind({ secondShut: 'no-first' }))).toBe(true)
     expect(waitsForOthers(blind({ first, secondShut: 'begin-again' }))).toBe(true)
