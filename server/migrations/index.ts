@@ -23,6 +23,7 @@ import { RowsAsWritten1764600000037 } from './0037-rows-as-written.ts'
 import { AmountsLearnt1764600000038 } from './0038-amounts-learnt.ts'
 import { SignInsOfAnAddress1764600000039 } from './0039-sign-ins-of-an-address.ts'
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
+import { DosesOfGoneOrders1764600000041 } from './0041-doses-of-gone-orders.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -52,4 +53,5 @@ export const migrations = [
   AmountsLearnt1764600000038,
   SignInsOfAnAddress1764600000039,
   RowMarkLookup1764600000040,
+  DosesOfGoneOrders1764600000041,
 ]

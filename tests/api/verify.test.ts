@@ -53,7 +53,7 @@ async function anAmendedOrder() {
     .expect(200)
   const reply = await signDraft(api, { number, version: signed.version + 1 })
   expect([reply.status, reply.body.versionNo]).toEqual([201, 2])
-  return { number, id: reply.body.id as string }
+  return { number, id: reply.body.id as string, school: bath.school }
 }
 
 describe('an order of which a signature is missing', () => {
@@ -97,10 +97,54 @@ describe('an order of which a signature is missing', () => {
     expect(textOf(print.body as Buffer)).toContain('Record check failed')
   })
 
-  it('by all of them is broken, and no draft', async () => {
-    const { number, id } = await anAmendedOrder()
+  it('by all of them is broken, and no draft; what happened at the tank is recorded, marked and explained all the same', async () => {
+    const { number, id, school } = await anAmendedOrder()
+    const before = api.nextId()
+    await house.record(number, { id: before }).expect(201)
     await byHand([`DELETE FROM order_versions WHERE order_id = $1`, id])
     const { agent } = house.technician
+    // a bath that was begun before it can be ended
+    const end = { id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T18:25:00Z' }
+    await agent.post(`/api/doses/${before}/stop`).send(end).expect(201)
+    expect((await house.calculateFirst(number)).body.code).toBe('broken-record')
+    expect((await house.give(number)).status).toBe(409)
+    const dose = api.nextId()
+    const recorded = (
+      await agent
+        .post(`/api/orders/${number}/doses/2/record`)
+        .send({
+          id: dose,
+          kind: 'recorded',
+          happenedAt: '2026-12-01T18:30:00Z',
+          amount: { value: '218', unit: 'mL' },
+          lotId: house.formalin.lotId,
+        })
+        .expect(201)
+    ).body
+    expect([recorded.record, recorded.mayStart]).toEqual(['broken', false])
+    const [record] = recorded.recorded
+    expect(record).toMatchObject({ id: dose, record: 'intact', amountText: '218\u00a0mL' })
+    const codes = record.exceptions.map(({ code }: { code: string }) => code)
+    expect(codes).toContain('not-intact')
+    expect(codes).not.toContain('other-product')
+    const vet = await api.as('veterinarian')
+    const chart = (await vet.agent.get(`/api/animals/${school.accession}`).expect(200)).body
+    expect(chart.discrepancies).toContainEqual(
+      expect.objectContaining({
+        kind: 'dose-under-broken-order',
+        facts: expect.objectContaining({ order: number, key: '2' }),
+      }),
+    )
+    expect((await rowFaults()).filter(({ at }) => at.startsWith('doses '))).not.toContainEqual(
+      expect.objectContaining({ at: `doses ${dose}` }),
+    )
+    const stop = { id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:30:00Z' }
+    await agent.post(`/api/doses/${dose}/stop`).send(stop).expect(201)
+    await agent
+      .post(`/api/dose-records/dose/${dose}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'Typed under another order' })
+      .expect(200)
     expect((await agent.get(`/api/orders?q=${number}`).expect(200)).body.rows[0].record).toBe('broken')
     expect((await agent.get(`/api/orders/${number}/print`)).status).toBe(409)
     await byHand([`DELETE FROM orders WHERE id = $1`, id])

@@ -75,21 +75,21 @@ export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
 /** The same of several orders at once; each row says whose it is. */
 export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseReadRow[]> {
   return db.query(
-    `SELECT d.id, v.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, v.contact_minutes,
+    `SELECT d.id, w.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, v.contact_minutes,
             d.exceptions_text, row_is_as_written('doses', d.id::text) AS is_as_written, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,
             s.recorded_by AS stop_recorded_by, ${otherStops} AS other_stops, x.reason AS struck_reason, x.recorded_at AS struck_at,
             y.printed_name AS struck_by
        FROM doses d
-       JOIN order_versions v ON v.id = d.order_version_id
+       JOIN orders_of_doses w ON w.dose_id = d.id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN product_lots t ON t.id = d.lot_id
        LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
        LEFT JOIN dose_voids x ON x.dose_id = d.id
        LEFT JOIN people y ON y.id = x.recorded_by
-      WHERE v.order_id = ANY($1::uuid[]) ORDER BY d.happened_at, d.recorded_at`,
+      WHERE w.order_id = ANY($1::uuid[]) ORDER BY d.happened_at, d.recorded_at`,
     [orderIds],
   )
 }
@@ -135,7 +135,7 @@ export function readCalculations(
 export async function readOrderNumberOfDose(db: Db, doseId: string) {
   const [row]: { number: string; dose_key: string }[] = await db.query(
     `SELECT o.number, d.dose_key FROM doses d
-       JOIN order_versions v ON v.id = d.order_version_id JOIN orders o ON o.id = v.order_id
+       JOIN orders_of_doses w ON w.dose_id = d.id JOIN orders o ON o.id = w.order_id
       WHERE d.id = $1`,
     [doseId],
   )

@@ -77,11 +77,11 @@ export async function lockOrderHead(tx: Tx, number: string): Promise<string | nu
   return row?.id ?? null
 }
 
-/** The same by one of its signed versions. */
-export async function lockOrderOfVersion(tx: Tx, versionId: string): Promise<string | null> {
+/** The same by one of its doses. */
+export async function lockOrderOfDose(tx: Tx, doseId: string): Promise<string | null> {
   const [row]: { id: string }[] = await tx.manager.query(
-    'SELECT o.id FROM orders o WHERE o.id = (SELECT v.order_id FROM order_versions v WHERE v.id = $1) FOR UPDATE',
-    [versionId],
+    'SELECT o.id FROM orders o WHERE o.id = (SELECT w.order_id FROM orders_of_doses w WHERE w.dose_id = $1) FOR UPDATE',
+    [doseId],
   )
   return row?.id ?? null
 }

@@ -68,6 +68,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
     }
     const { created } = await repository.insertDose(tx, {
       id: given.id,
+      orderId: situation.row.id,
       orderVersionId: situation.versionId,
       doseKey: situation.planned.key,
       kind: given.kind,
@@ -244,7 +245,7 @@ export function createAdministrationsService(parts: AdministrationsParts) {
       const happenedAt = timeByNow(given.happenedAt, parts.clock.now())
       await parts.transactions.inTransaction(context, async (tx) => {
         const dose = await repository.findDose(tx, doseId)
-        const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
+        const orderId = dose && (await repository.lockOrderOfDose(tx, dose.id))
         if (!dose || !orderId) throw new Problem('not-found')
         const isFirst = !(await repository.hasEnded(tx, doseId))
         const times = {

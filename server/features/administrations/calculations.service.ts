@@ -10,7 +10,7 @@ import { noteLearnt } from '../orders/index.ts'
 import type { Learnt } from '../orders/index.ts'
 import * as repository from './administrations.repository.ts'
 import { compareCalculations, comparedWith } from './compare-calculations.ts'
-import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf } from './dose-context.ts'
+import { lockAndRead, personOf, refuseBroken, refuseGiver, subjectOf, versionOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
@@ -54,7 +54,7 @@ export function createCalculations(parts: AdministrationsParts) {
         const volume = situation.judgement.facts.volume.determination
         const { created } = await repository.insertCalculation(tx, {
           id: given.id,
-          orderVersionId: situation.versionId,
+          orderVersionId: versionOf(situation),
           doseKey: key,
           part: 'first',
           enclosureRead: null,
@@ -116,7 +116,7 @@ export function createCalculations(parts: AdministrationsParts) {
         const agrees = differs.length === 0
         const { created } = await repository.insertCalculation(tx, {
           id: given.id,
-          orderVersionId: situation.versionId,
+          orderVersionId: versionOf(situation),
           doseKey: key,
           part: 'second',
           enclosureRead,

@@ -27,7 +27,8 @@ import type { SignedOverride } from './signed-overrides.ts'
 
 export interface DoseSituation {
   row: OrderRow
-  versionId: string
+  /** Null where every signed version is gone: what happened is recorded all the same. */
+  versionId: string | null
   /** False where the signed text cannot be read or was changed: `content` is then what the columns tell, and nothing is worked out. */
   readable: boolean
   content: SignedOrder
@@ -128,7 +129,12 @@ async function standIn(
   at: Date,
   db: Db = dataSource,
 ): Promise<SignedOrder> {
-  const named = await animals.questions.animalsById(order.fields.animalIds, at, db)
+  const { animalIds, enclosureId } = order.fields
+  // where nothing says whom it was for, it was for whoever was there
+  const named =
+    animalIds.length > 0
+      ? await animals.questions.animalsById(animalIds, at, db)
+      : await animals.questions.animalsIn([enclosureId], at, db)
   return { ...order, water: { ...order.water, animals: named.map((animal) => saidAnimal(animal, true)) } }
 }
 
@@ -154,6 +160,14 @@ export const planOf = (fields: SignedOrder['fields'], block: SignatureBlock): Pl
     block.zone,
   )
 
+/** A dose whose plan is gone with the order: that of the key it was recorded under, with no time of its own. */
+const unplanned = (key: string, { signedAt }: SignatureBlock): PlannedDose => ({
+  key,
+  dueAt: signedAt,
+  opensAt: signedAt,
+  closesAt: signedAt,
+})
+
 /**
  * One planned dose of the signed version in force, worked out and judged again by the facts of an instant: now before
  * a dose, or the time of a dose that is being recorded.
@@ -167,11 +181,11 @@ export async function readDoseSituation(
   at: Date,
   options: { lotId?: string | null; db?: Db } = {},
 ): Promise<DoseSituation> {
-  const sealed = await parts.queries.sealed(number, undefined)
+  const sealed = await parts.queries.sealedForDose(number)
   const readable = sealed.content !== null
   const content = sealed.content ?? (await standIn(parts, sealed.standIn, at, options.db))
   const { fields } = content
-  const plan = planOf(fields, sealed.block)
+  const plan = sealed.versionId === null ? [unplanned(key, sealed.block)] : planOf(fields, sealed.block)
   const planned = plan.find((dose) => dose.key === key)
   if (!planned) throw new Problem('not-found', { detail: 'The order plans no such dose.' })
   const db = options.db ?? parts.dataSource
@@ -210,7 +224,10 @@ export async function readDoseSituation(
     facts,
     lotId,
     at: at.toISOString(),
-    overrides: await readSignedOverrides(db, parts.signing, { orderVersionId: sealed.versionId, key }),
+    overrides:
+      sealed.versionId === null
+        ? []
+        : await readSignedOverrides(db, parts.signing, { orderVersionId: sealed.versionId, key }),
     answer:
       facts &&
       evaluateCautions({

@@ -29,7 +29,10 @@ export class DoseCalculation {
 @Entity('doses')
 export class DoseRow {
   @PrimaryColumn({ type: 'uuid' }) id!: string
-  @Column({ type: 'uuid', name: 'order_version_id' }) orderVersionId!: string
+  /** Null in records from before a dose said its order itself. */
+  @Column({ type: 'uuid', name: 'order_id', nullable: true }) orderId!: string | null
+  /** Null where every signed version of the order was gone when it was recorded. */
+  @Column({ type: 'uuid', name: 'order_version_id', nullable: true }) orderVersionId!: string | null
   @Column({ type: 'text', name: 'dose_key' }) doseKey!: string
   @Column({ type: 'text' }) kind!: 'given' | 'recorded' | 'withheld' | 'refused'
   @Column({ type: 'uuid', name: 'lot_id', nullable: true }) lotId!: string | null

@@ -33,6 +33,7 @@ async function calculationsOf(
   { row, versionId, planned }: Pick<DoseSituation, 'row' | 'versionId' | 'planned'>,
 ): Promise<Calculations> {
   const { key } = planned
+  if (versionId === null) return { all: [], seenBy: [] }
   const all = await readCalculations(db, versionId, key)
   const { knowers } = await readKnown(db, [row.id])
   // whoever made a first calculation under this version is told by the calculations themselves
@@ -83,9 +84,9 @@ export function createAdministrations(
       .filter(({ keys }) => keys.length > 0)
     const mayBeSecondElsewhere = elsewhere.length > 0
     const sheet = presentSheet({ ...found, blind, mayBeSecondElsewhere, actor, now: now().toISOString() })
-    const own = { orderId: row.id, number, versionId, keys: [key] }
+    const own = versionId === null ? [] : [{ orderId: row.id, number, versionId, keys: [key] }]
     const learnt = [
-      ...(isShownEarly(sheet, found.calculations) ? [own] : []),
+      ...(isShownEarly(sheet, found.calculations) ? own : []),
       ...(showsAmount(sheet) && !workedOutBlind(found.calculations, actor) ? elsewhere : []),
     ]
     if (learnt.length > 0) await service.noteSeen(context, learnt)

@@ -13,7 +13,7 @@ export interface LotNamed {
 /** The lot that somebody names for a dose; refused where there is no such lot. */
 export async function readLotNamed(
   tx: Tx,
-  situation: Pick<DoseSituation, 'content'>,
+  situation: Pick<DoseSituation, 'content' | 'versionId'>,
   lotId: string,
 ): Promise<LotNamed> {
   const [row]: { lot_number: string; product_id: string; product_name: string }[] = await tx.manager.query(
@@ -22,14 +22,15 @@ export async function readLotNamed(
     [lotId],
   )
   if (!row) throw refusedInput('/lotId', lotWords.unknown, 'unknown-lot')
-  const isOrdered = row.product_id === situation.content.product.id
+  // of an order that is gone with all its versions nobody knows the product
+  const isOrdered = situation.versionId === null || row.product_id === situation.content.product.id
   return { lotNumber: row.lot_number, productName: row.product_name, isOrdered }
 }
 
 /** Nothing is prepared or given from a lot of another product. */
 export async function refuseOtherLot(
   tx: Tx,
-  situation: Pick<DoseSituation, 'content'>,
+  situation: Pick<DoseSituation, 'content' | 'versionId'>,
   lotId: string,
 ): Promise<void> {
   const { lotNumber, productName, isOrdered } = await readLotNamed(tx, situation, lotId)

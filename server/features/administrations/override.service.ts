@@ -6,7 +6,7 @@ import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import * as repository from './administrations.repository.ts'
-import { lockAndRead, personOf, refuseBroken, subjectOf } from './dose-context.ts'
+import { lockAndRead, personOf, refuseBroken, subjectOf, versionOf } from './dose-context.ts'
 import type { AdministrationsParts } from './dose-context.ts'
 import { refuseOtherLot } from './lot-of-order.ts'
 import { findingOf } from './signed-overrides.ts'
@@ -77,7 +77,7 @@ export function createOverrides(parts: AdministrationsParts) {
         })
         await repository.insertOverride(tx, {
           id,
-          orderVersionId: situation.versionId,
+          orderVersionId: versionOf(situation),
           doseKey: key,
           signedTextId: sealed.id,
           ruleId,

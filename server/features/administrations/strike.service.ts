@@ -15,7 +15,7 @@ import { tellClocksAnew } from './tell-clocks.ts'
 export function createStrikes(parts: AdministrationsParts) {
   async function locked(tx: Tx, doseId: string): Promise<{ dose: DoseRow; orderId: string; number: string }> {
     const dose = await repository.findDose(tx, doseId)
-    const orderId = dose && (await repository.lockOrderOfVersion(tx, dose.orderVersionId))
+    const orderId = dose && (await repository.lockOrderOfDose(tx, dose.id))
     const named = orderId && (await readOrderNumberOfDose(tx.manager, doseId))
     if (!dose || !orderId || !named) throw new Problem('not-found')
     return { dose, orderId, number: named.number }

@@ -15,7 +15,7 @@ import type { SignedOrder } from './order-content.ts'
 import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
 import { openOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
-import { standInOrder } from './stand-in-order.ts'
+import { standInGone, standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
 import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
 import {
@@ -27,7 +27,7 @@ import {
   readVersions,
 } from './orders.reads.ts'
 import type { OrderReadRow, VersionReadRow } from './orders.reads.ts'
-import { missingLinks } from './signing-chain.ts'
+import { lastSigning, missingLinks } from './signing-chain.ts'
 
 export interface OrderQueriesParts {
   dataSource: Db
@@ -201,6 +201,22 @@ export function createOrderQueries(parts: OrderQueriesParts) {
 
     /** Holds and ends of an order, the newest first. */
     events: (orderId: string) => readEvents(parts.dataSource, orderId),
+
+    /** The version in force for the tank: where every version is gone, what is left to record a fact under. */
+    async sealedForDose(number: string) {
+      const row = await rowOf(number)
+      if (row.version_id !== null || missingLinks(row.chain).length === 0)
+        return this.sealed(number, undefined)
+      const { versionNo, at } = lastSigning(row.chain) ?? { versionNo: 0, at: row.created_at }
+      return {
+        row: presentOrderRow(row, parts.now().toISOString()),
+        versionId: null,
+        versionNo,
+        content: null,
+        standIn: standInGone(row, { versionNo, at }),
+        block: parts.signing.goneBlock(at),
+      }
+    },
 
     /** One signed version, checked now, with where the order stands, for paper. */
     async sealed(number: string, versionNo: number | undefined) {

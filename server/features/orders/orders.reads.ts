@@ -204,7 +204,7 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
             a.by_name AS alone_by, a.minutes AS alone_after_minutes
        FROM live_doses d
-       JOIN order_versions v ON v.id = d.order_version_id
+       JOIN orders_of_doses w ON w.dose_id = d.id
        LEFT JOIN people p ON p.id = d.recorded_by
        LEFT JOIN LATERAL (
          SELECT r.printed_name AS by_name,
@@ -216,7 +216,7 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
                           ORDER BY g.recorded_at DESC, g.id DESC LIMIT 1) f ON f.recorded_by = c.recorded_by
            JOIN people r ON r.id = c.recorded_by
           WHERE c.id = d.second_calculation_id) a ON true
-      WHERE v.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
+      WHERE w.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
     [orderId],
   )
 }

@@ -24,6 +24,14 @@ function signingIn(text: string): Signing | null {
   }
 }
 
+/** The last signature that the audit trail tells of, and when; null where it tells of none. */
+export function lastSigning({ signings }: SigningChain): { versionNo: number; at: Date } | null {
+  const text = signings.at(-1)
+  const signing = text === undefined ? null : signingIn(text)
+  if (text === undefined || signing === null) return null
+  return { versionNo: signing.versionNo, at: new Date((JSON.parse(text) as { at: string }).at) }
+}
+
 /**
  * The links that are missing between what was signed and what stands. A version taken away brings an older one back as
  * if it were in force, so an order with any link missing is not what was signed, whatever its newest version looks like.

@@ -6,6 +6,23 @@ import { engineVersion } from './order-content.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { Copies, OrderReadRow } from './orders.reads.ts'
 
+/** The same of an order that is gone with every version: its number and where, and nothing else. */
+export const standInGone = (
+  order: Pick<OrderReadRow, 'number' | 'enclosure_id' | 'enclosure_code' | 'enclosure_name'>,
+  { versionNo, at }: { versionNo: number; at: Date },
+): SignedOrder =>
+  standInOrder(order, {
+    version: {
+      version_no: versionNo,
+      enclosure_id: order.enclosure_id,
+      contact_minutes: null,
+      doses: 1,
+      interval_hours: null,
+      starts_at: at.toISOString(),
+    },
+    animalIds: [],
+  })
+
 /**
  * As much of an order whose signed text cannot be read as the columns beside it tell: where, whom, which drug and when.
  * What has happened at the tank is recorded under it. No figure that somebody could dose by is in it.
@@ -37,7 +54,7 @@ export function standInOrder(
     product: {
       id: text('product_id'),
       agent,
-      establishedName: agentNames[agent],
+      establishedName: agent in agentNames ? agentNames[agent] : orderWords.drugGone,
       productName: '',
       strength: { value: '', unit: '' },
       strengthBasis: '',

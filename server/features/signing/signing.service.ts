@@ -119,6 +119,9 @@ export function createSigningService(parts: SigningParts) {
       return { id, hash: seal.hash, text }
     },
 
+    /** What stands under a record whose signed text is gone. */
+    goneBlock: (recordedAt: Date): SignatureBlock => goneSealed(recordedAt).block,
+
     /**
      * A signed text read back and checked now: its content, and the block to show under it. One that is gone is shown as
      * broken, under the time of the record that points at it.
