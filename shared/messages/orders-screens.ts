@@ -145,6 +145,7 @@ export const orderViewWords = defineMessages({
     `${p.jurisdiction}, licence ${p.number}, valid to ${p.until}`,
   signedAt: (p: { at: string }) => `Signed ${p.at}`,
   intact: 'Checked now: this is the text that was signed.',
+  recordUnderGone: 'Record what went in',
   brokenTitle: 'Record check failed',
   broken:
     'This is not the text that was signed. Do not act on it, and do not dose. Tell the administrator; a print says the same.',

@@ -115,7 +115,7 @@ describe('an order of which a signature is missing', () => {
         .send({
           id: dose,
           kind: 'recorded',
-          happenedAt: '2026-12-01T18:30:00Z',
+          happenedAt: '2026-12-01T18:22:00Z',
           amount: { value: '218', unit: 'mL' },
           lotId: house.formalin.lotId,
         })
@@ -138,7 +138,7 @@ describe('an order of which a signature is missing', () => {
     expect((await rowFaults()).filter(({ at }) => at.startsWith('doses '))).not.toContainEqual(
       expect.objectContaining({ at: `doses ${dose}` }),
     )
-    const stop = { id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:30:00Z' }
+    const stop = { id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:22:00Z' }
     await agent.post(`/api/doses/${dose}/stop`).send(stop).expect(201)
     await agent
       .post(`/api/dose-records/dose/${dose}/void`)

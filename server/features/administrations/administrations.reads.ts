@@ -83,6 +83,7 @@ export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseRe
             y.printed_name AS struck_by
        FROM doses d
        JOIN orders_of_doses w ON w.dose_id = d.id
+       LEFT JOIN order_versions v ON v.id = d.order_version_id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN product_lots t ON t.id = d.lot_id
        LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true

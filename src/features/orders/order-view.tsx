@@ -73,6 +73,19 @@ function GoOn({ order }: { order: Order }) {
   )
 }
 
+/** An order that was signed and of which no version is left: what went in under it is recorded all the same. */
+function GoneOrder({ order }: { order: Order }) {
+  const record = useMay('dose.record')
+  return (
+    <>
+      <BrokenRecord state="broken" unreadable />
+      {record.allowed ? (
+        <ButtonLink to={paths.orderSheet(order.number, '1')}>{words.recordUnderGone}</ButtonLink>
+      ) : null}
+    </>
+  )
+}
+
 /** An order that nobody signed yet, to be read. */
 export function UnsignedOrder({ order, above }: { order: Order; above: ReactNode }) {
   const { zone } = useMe().facility
@@ -82,9 +95,17 @@ export function UnsignedOrder({ order, above }: { order: Order; above: ReactNode
         <Head order={order} more="" />
         <div className="pane stack">
           {above}
-          <p>{order.phase === 'proposed' ? words.proposalOf({ by: order.createdBy }) : words.notSigned}</p>
-          {order.phase === 'proposed' ? <p>{words.notSigned}</p> : null}
-          <GoOn order={order} />
+          {order.record === 'broken' ? (
+            <GoneOrder order={order} />
+          ) : (
+            <>
+              <p>
+                {order.phase === 'proposed' ? words.proposalOf({ by: order.createdBy }) : words.notSigned}
+              </p>
+              {order.phase === 'proposed' ? <p>{words.notSigned}</p> : null}
+              <GoOn order={order} />
+            </>
+          )}
         </div>
       </Area>
       <Area className="pane stack gap-5">
