@@ -12,6 +12,7 @@ import {
 import type { BuiltEnclosure } from '../builders/a-water.ts'
 import { password } from '../support/api.ts'
 import { launchChromium } from '../support/chromium.ts'
+import type { SessionOptions } from '../support/chromium.ts'
 import { deskSize, expectSound, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
@@ -60,8 +61,8 @@ const expectedErrors = [
   /ERR_INTERNET_DISCONNECTED/,
 ]
 const desk = { ...deskSize, expectedErrors }
-const phone = { ...phoneSize, keepsSheets: true, expectedErrors }
-const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
+const phone = { ...phoneSize, expectedErrors }
+const signedIn = (who: string, size: SessionOptions, at: string): Promise<Page> =>
   openSignedIn(browser, app, who, at, size)
 
 /** A formalin bath of 45 min at 100 µL/L, a hazard: 2,181.4 L × 100 µL/L = 218.14 mL, worked by hand. */
@@ -219,7 +220,7 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await time.filter({ hasText: /^2[56]:\d\d$/ }).waitFor()
 
     // a keeper sees what has to be seen, and stops without a password
-    const keeper = await signedIn('keeper', phone, `${sheetAt}?dose=1`)
+    const keeper = await signedIn('keeper', { ...phone, keepsSheets: true }, `${sheetAt}?dose=1`)
     await keeper
       .getByRole('timer')
       .filter({ hasText: /^2[56]:\d\d$/ })

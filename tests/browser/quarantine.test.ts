@@ -58,7 +58,8 @@ afterAll(async () => {
 const ago = (days: number) => new Date(app.clock.now().getTime() - days * dayMs).toISOString()
 const expectedErrors = [...refusals(403, 409, 422), /ERR_INTERNET_DISCONNECTED/, /ERR_FAILED/]
 const desk = { ...deskSize, expectedErrors }
-const phone = { ...phoneSize, expectedErrors, keepsSheets: true }
+const phone = { ...phoneSize, expectedErrors }
+const awayFromSignal = { ...phone, keepsSheets: true }
 const signedIn = (who: string, size: typeof desk, at: string): Promise<Page> =>
   openSignedIn(browser, app, who, at, size)
 
@@ -121,7 +122,7 @@ describe('a keeper with wet hands, at 390 px', () => {
     const { code } = tank.enclosure
     const vet = (await app.as('veterinarian')).agent
     const seen = async () => (await vet.get(`/api/observations?case=${tank.number}`).expect(200)).body
-    const page = await signedIn('keeper', phone, '/rounds')
+    const page = await signedIn('keeper', awayFromSignal, '/rounds')
     await page.getByRole('heading', { name: 'Quarantine: Wing' }).waitFor()
     await expectSound(page, 'rounds')
     await picture(page, 'rounds')
@@ -204,7 +205,7 @@ describe('a keeper with wet hands, at 390 px', () => {
   it('is told that an urgent call was not sent, whom to telephone, and later who has seen it', async () => {
     const tank = await aCase(app, { at: ago(5), count: 4 })
     const { code } = tank.enclosure
-    const page = await signedIn('keeper', phone, '/rounds')
+    const page = await signedIn('keeper', awayFromSignal, '/rounds')
     await page.getByRole('link', { name: `Observe ${code}`, exact: true }).click()
     await page.getByRole('button', { name: 'Hold' }).waitFor()
     await page.waitForLoadState('networkidle')

@@ -10,7 +10,7 @@ import { aBathWater, aProduct, readingsNow } from '../builders/an-order.ts'
 import { textOf } from '../pdf/support/poppler.ts'
 import { password } from '../support/api.ts'
 import { launchChromium, newSession } from '../support/chromium.ts'
-import type { BrowserSession } from '../support/chromium.ts'
+import type { BrowserSession, SessionOptions } from '../support/chromium.ts'
 import { choose, deskSize, phoneSize, picture, refusals, signIn } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
@@ -70,9 +70,9 @@ afterAll(async () => {
 // who is signed in is asked first; without a signal every request fails
 const expectedErrors = [...refusals(409, 422), /ERR_INTERNET_DISCONNECTED/]
 const desk = { ...deskSize, expectedErrors }
-const phone = { ...phoneSize, keepsSheets: true, expectedErrors }
+const phone = { ...phoneSize, expectedErrors }
 
-async function at(size: typeof desk, name: string, address: string, daysLater = 0): Promise<BrowserSession> {
+async function at(size: SessionOptions, name: string, address: string, daysLater = 0): Promise<BrowserSession> {
   const session = await newSession(browser, { ...size, daysLater })
   await signIn(session.page, app, name, address)
   return session
@@ -134,7 +134,7 @@ async function opensTheCase(accession: string): Promise<string> {
 
 /** The keeper observes and flags on a phone, then once without a signal; both reach the veterinarian, once. */
 async function observes(): Promise<void> {
-  const { page, context } = await at(phone, 'keeper', '/rounds')
+  const { page, context } = await at({ ...phone, keepsSheets: true }, 'keeper', '/rounds')
   await page.getByRole('link', { name: /Observe QT-3/ }).click()
   await page.getByRole('radio', { name: 'Some', exact: true }).click()
   await page.getByRole('radio', { name: 'Fast', exact: true }).click()
