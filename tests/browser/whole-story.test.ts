@@ -72,7 +72,12 @@ const expectedErrors = [...refusals(409, 422), /ERR_INTERNET_DISCONNECTED/]
 const desk = { ...deskSize, expectedErrors }
 const phone = { ...phoneSize, expectedErrors }
 
-async function at(size: SessionOptions, name: string, address: string, daysLater = 0): Promise<BrowserSession> {
+async function at(
+  size: SessionOptions,
+  name: string,
+  address: string,
+  daysLater = 0,
+): Promise<BrowserSession> {
   const session = await newSession(browser, { ...size, daysLater })
   await signIn(session.page, app, name, address)
   return session
