@@ -66,6 +66,38 @@ describe('bodies without a name where two cases live', () => {
     ])
   })
 
+  it('are waited for again by both when the death that they were named by is struck out', async () => {
+    const { both, id, standing } = await bodiesInOneTank('OB-AGAIN', 2)
+    const { accession } = both[1].animal
+    const deaths = [{ id: api.nextId(), accession, count: 1 }]
+    expect((await name(id, { deaths, reason: 'the other was eaten' })).status).toBe(201)
+    const vet = await api.as('veterinarian')
+    await vet.agent
+      .post(`/api/animals/${accession}/deaths/${String(deaths[0]?.id)}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'It was one of the others' })
+      .expect(200)
+    const again = [
+      [extended, [null, null]],
+      [extended, [null, null]],
+    ]
+    expect(await standing()).toEqual(again)
+    // also by a case that is entered later
+    const at = '2026-11-10T14:00:00Z'
+    const { enclosure, taxonId } = both[0]
+    const late = await aCase(api, { enclosure, taxonId, at })
+    expect((await vet.agent.get(late.url)).body).toMatchObject({
+      earliestClearanceOn: extended,
+      deaths: [{ count: 2 }],
+    })
+    // and once the look itself is struck out, by none
+    expect((await strike('veterinarian', id)).status).toBe(200)
+    expect(await standing()).toEqual([
+      [unextended, []],
+      [unextended, []],
+    ])
+  })
+
   it('go on standing in both where nobody will ever name them', async () => {
     const { both, id, standing } = await bodiesInOneTank('OB-REST', 2)
     const { accession } = both[0].animal
@@ -219,6 +251,22 @@ describe('bodies found where a batch is no longer, or is not known of yet', () =
     await moveOut(left, '2026-12-01T17:50:00Z')
     expect((await seeDead(left.enclosure.code)).unassignedDead).toBe(1)
     expect([await clearanceOf(left.url), await clearanceOf(stays.url)]).toEqual(['2026-12-15', '2026-12-15'])
+  })
+
+  it.each([
+    ['in time', '2026-11-30T12:00:00Z', '2026-12-15'],
+    ['only after they were found', '2026-12-01T18:05:00Z', '2026-12-10'],
+  ])('where a move that is entered later had brought a batch %s', async (_, happenedAt, clearance) => {
+    const one = await aCase(api)
+    const to = await anEnclosure(api, `${one.enclosure.code}-C`, { boundary: 'Wing' })
+    await seeDead(to.code)
+    expect(await clearanceOf(one.url)).toBe('2026-12-10')
+    const { agent } = await api.as('technician')
+    await agent
+      .post(`/api/animals/${one.animal.accession}/moves`)
+      .send({ id: api.nextId(), fromEnclosureId: one.enclosure.id, toEnclosureId: to.id, happenedAt })
+      .expect(201)
+    expect(await clearanceOf(one.url)).toBe(clearance)
   })
 
   it('before its case was entered are waited for by it too', async () => {

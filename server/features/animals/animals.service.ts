@@ -1,6 +1,7 @@
 import type { Transactions } from '../../platform/database/transactions.ts'
 import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
+import type { Afterwards } from './afterwards.ts'
 import { createAccession } from './accession.service.ts'
 import { createCounts } from './counts.service.ts'
 import { createDiscrepancies } from './discrepancies.service.ts'
@@ -21,6 +22,7 @@ export function createAnimalsService(parts: {
   ids: Ids
   facility: FacilityService
   water: WaterQuestions
+  afterwards: Afterwards
 }) {
   const withLedgers = { ...parts, ledgers: createLedgers(parts), waterLocks: createWaterLocks(parts) }
   const locks = createLocks(withLedgers)

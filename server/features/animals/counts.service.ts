@@ -215,6 +215,7 @@ export function createCounts(parts: MoveParts & { moves: Moves }) {
           after: { reason },
         })
         await ledgers.settlePlace(tx, animal, { kind: 'death', id })
+        await parts.afterwards.deathStruck(tx, id)
       })
     },
 

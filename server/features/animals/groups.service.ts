@@ -184,6 +184,7 @@ export function createGroups(parts: MoveParts & { moves: Moves; locks: LockServi
             times,
           })
         await moves.noteBreach(tx, child, moveId, verdict, times, { from: from.code, to: to.code })
+        await parts.afterwards.placesChanged(tx, child.id)
         await ledgers.settlePlace(tx, parent, source)
       })
     },

@@ -10,6 +10,7 @@ import {
   MoveRow,
   WeightRow,
 } from './animal-ledgers.entity.ts'
+import { createAfterwards } from './afterwards.ts'
 import { animalRecordRoutes } from './animal-records.routes.ts'
 import {
   DiscrepancyResolutionRow,
@@ -55,7 +56,8 @@ export const animalEntities = [
 
 export function createAnimals(given: Parts & { facility: FacilityService; water: Water }) {
   const parts = { ...given, water: given.water.questions }
-  const service = createAnimalsService(parts)
+  const afterwards = createAfterwards()
+  const service = createAnimalsService({ ...parts, afterwards })
   const amounts = createAmountsLeftOut()
   const queries = createAnimalQueries({ ...parts, amounts })
   return {
@@ -63,6 +65,8 @@ export function createAnimals(given: Parts & { facility: FacilityService; water:
     queries,
     amounts,
     questions: createAnimalQuestions(parts),
+    /** For features that rest on animals: what they do when the ledgers change. */
+    follow: afterwards.follow,
     routes: [
       ...animalRoutes(queries, parts.clock),
       ...animalRecordRoutes(service, queries),

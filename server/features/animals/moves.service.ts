@@ -17,6 +17,7 @@ import * as animals from './animals.repository.ts'
 import type { EnclosureRow } from './animals.repository.ts'
 import type { Ledgers } from './ledgers.ts'
 import * as repository from './ledgers.repository.ts'
+import type { Afterwards } from './afterwards.ts'
 import { refuseField, sayInstant } from './refuse.ts'
 import { checkMayStrike } from './strikes.ts'
 import { openDiscrepancies } from './watch.repository.ts'
@@ -29,6 +30,7 @@ export interface MoveParts {
   facility: FacilityService
   ledgers: Ledgers
   waterLocks: WaterLocks
+  afterwards: Afterwards
 }
 
 /** What a person says about a move beyond where and when. */
@@ -250,6 +252,7 @@ export function createMoves(parts: MoveParts) {
           after: { enclosure: to.code, happenedAt: times.happenedAt.toISOString(), ...judged },
         })
         await noteBreach(tx, animal, id, verdict, times, { from: from.code, to: to.code })
+        await parts.afterwards.placesChanged(tx, animal.id)
       })
     },
 
@@ -281,6 +284,7 @@ export function createMoves(parts: MoveParts) {
           before: { moveId },
           after: { reason },
         })
+        await parts.afterwards.placesChanged(tx, animal.id)
       })
     },
   }

@@ -61,7 +61,8 @@ export function createBodiesService(
         // is left stays where it was
         if (named > 0) {
           await unnamed.withdraw(tx, heads, { observationId, reason: observationDetails.bodiesNamed })
-          await unnamed.enter(tx, heads, { count: row.unassignedDead - named, observationId }, times)
+          const again = await repository.countNamedByStruck(tx, observationId)
+          await unnamed.enter(tx, heads, { count: row.unassignedDead - named + again, observationId }, times)
         }
         for (const [i, death] of given.deaths.entries()) {
           try {

@@ -77,6 +77,7 @@ export function createQuarantine(
   const parts = { ...given, people: given.people.questions, water: given.water.questions }
   const writer = createCaseWriter(parts)
   const unnamed = createUnnamedBodies({ ...parts, writer })
+  given.animals.follow(unnamed)
   const cases = createCasesService({ ...parts, writer, unnamed })
   const events = createCaseEventsService({ ...parts, writer })
   const treatments = createTreatmentsService({ ...parts, events })

@@ -73,6 +73,35 @@ export interface OpenBodiesRow {
   left_count: number
 }
 
+/** Bodies that an observation `o` had named by deaths that were struck out since: they are without a name again. */
+const namedByStruck = `(SELECT coalesce(sum(d.seen_count), 0)::int FROM observation_deaths k
+    JOIN deaths d ON d.id = k.death_id JOIN animal_voids s ON s.death_id = d.id WHERE k.observation_id = o.id)`
+
+/** How many bodies of an observation lost their name again. */
+export async function countNamedByStruck(tx: Tx, observationId: string): Promise<number> {
+  const [row]: { count: number }[] = await tx.manager.query(
+    `SELECT ${namedByStruck} AS count FROM observations o WHERE o.id = $1`,
+    [observationId],
+  )
+  return row?.count ?? 0
+}
+
+/** The observation that a death named a body of, unless it was struck out. */
+export async function findNamedBy(
+  tx: Tx,
+  deathId: string,
+): Promise<(OpenBodiesRow & { waiting_case_ids: string[] }) | null> {
+  const [row]: (OpenBodiesRow & { waiting_case_ids: string[] })[] = await tx.manager.query(
+    `SELECT o.id, o.enclosure_id, o.happened_at, o.happened_on::text AS happened_on, d.seen_count AS left_count,
+            ARRAY(SELECT e.case_id FROM live_case_events e
+                   WHERE e.observation_id = o.id AND e.facts ->> 'diedElsewhereId' = d.id::text) AS waiting_case_ids
+       FROM observation_deaths k JOIN observations o ON o.id = k.observation_id JOIN deaths d ON d.id = k.death_id
+      WHERE k.death_id = $1 AND NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)`,
+    [deathId],
+  )
+  return row ?? null
+}
+
 /** Bodies without a name that were found in these enclosures and never stood in this case. */
 export function findOpenBodies(
   tx: Tx,
@@ -81,9 +110,10 @@ export function findOpenBodies(
 ): Promise<OpenBodiesRow[]> {
   return tx.manager.query(
     `SELECT o.id, o.enclosure_id, o.happened_at, o.happened_on::text AS happened_on,
-            o.unassigned_dead - coalesce(b.named_count, 0) AS left_count
+            o.unassigned_dead - coalesce(b.named_count, 0) + ${namedByStruck} AS left_count
        FROM observations o LEFT JOIN observation_bodies b ON b.observation_id = o.id
-      WHERE o.enclosure_id = ANY ($2::uuid[]) AND o.unassigned_dead > coalesce(b.named_count, 0)
+      WHERE o.enclosure_id = ANY ($2::uuid[]) 
+        AND o.unassigned_dead - coalesce(b.named_count, 0) + ${namedByStruck} > 0
         AND NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)
         AND NOT EXISTS (SELECT 1 FROM case_events e
                          WHERE e.case_id = $1 AND e.observation_id = o.id AND e.kind = 'death')

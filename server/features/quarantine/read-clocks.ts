@@ -176,6 +176,17 @@ export async function findCasesIn(
     .map(({ id, number }) => ({ id, number }))
 }
 
+/** The running cases that an animal is or was in, itself or as a part of a group. */
+export async function findRunningCasesOf(
+  db: Db,
+  animalId: string,
+): Promise<{ id: string; number: string }[]> {
+  const batches = withParts(await reads.readMembers(db), await reads.readSplits(db))
+  const ids = new Set(batches.filter((row) => row.animal_id === animalId).map((row) => row.case_id))
+  if (ids.size === 0) return []
+  return (await reads.readCases(db, [...ids])).filter(({ ended_at }) => ended_at === null)
+}
+
 /** Where the batch of a case was, and until when, while the case ran. */
 export async function readStaysOfCase(db: Db, caseId: string): Promise<reads.BatchStayReadRow[]> {
   const batches = withParts(await reads.readMembers(db), await reads.readSplits(db)).filter(

@@ -7,8 +7,14 @@ import type { FactTimes } from '../facility/index.ts'
 import type { CaseReadRow } from './case-facts.reads.ts'
 import type { CaseWriter } from './case-writer.ts'
 import { findCaseOf } from './cases.repository.ts'
-import { findBodiesEvents, findDiedElsewhere, findOpenBodies } from './observations.repository.ts'
-import { findCasesIn, readStaysOfCase } from './read-clocks.ts'
+import type { OpenBodiesRow } from './observations.repository.ts'
+import {
+  findBodiesEvents,
+  findDiedElsewhere,
+  findNamedBy,
+  findOpenBodies,
+} from './observations.repository.ts'
+import { findCasesIn, findRunningCasesOf, readStaysOfCase } from './read-clocks.ts'
 
 /**
  * A body may have lain there for a day before anybody saw it: tanks in quarantine are looked into once a day at least. A
@@ -45,6 +51,27 @@ export function createUnnamedBodies(parts: { ids: Ids; animals: Animals; writer:
     const facts = { kind: 'death' as const, deathCount: count, ...named }
     for (const head of heads)
       await writer.write(tx, head, { id: ids.next(), facts, observationId, origin, device }, times)
+  }
+
+  /** Bodies that may be of the batch of a case and never stood in it. */
+  async function listMissed(tx: Tx, head: Pick<CaseReadRow, 'id'>): Promise<OpenBodiesRow[]> {
+    const stays = await readStaysOfCase(tx.manager, head.id)
+    const places = [...new Set(stays.map((stay) => stay.enclosure_id))]
+    const missed: OpenBodiesRow[] = []
+    for (const row of await findOpenBodies(tx, head.id, places)) {
+      const since = sinceWhen(row.happened_at)
+      const cases = await findCasesIn(tx.manager, [row.enclosure_id], row.happened_at, since)
+      if (cases.some(({ id }) => id === head.id)) missed.push(row)
+    }
+    return missed
+  }
+
+  async function catchUp(tx: Tx, head: Pick<CaseReadRow, 'id' | 'number'>): Promise<void> {
+    for (const row of await listMissed(tx, head)) {
+      const { happened_at: happenedAt, happened_on: happenedOn } = row
+      const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
+      await enter(tx, [head], { count: row.left_count, observationId: row.id }, times)
+    }
   }
 
   return {
@@ -86,15 +113,33 @@ export function createUnnamedBodies(parts: { ids: Ids; animals: Animals; writer:
     },
 
     /** What was found where a batch lived before its case, or its joining, was entered: the clock waits for it too. */
-    async catchUp(tx: Tx, head: Pick<CaseReadRow, 'id' | 'number'>): Promise<void> {
-      const stays = await readStaysOfCase(tx.manager, head.id)
-      const places = [...new Set(stays.map((stay) => stay.enclosure_id))]
-      for (const row of await findOpenBodies(tx, head.id, places)) {
-        const { happened_at: happenedAt, happened_on: happenedOn } = row
-        const cases = await findCasesIn(tx.manager, [row.enclosure_id], happenedAt, sinceWhen(happenedAt))
-        if (!cases.some(({ id }) => id === head.id)) continue
-        const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
-        await enter(tx, [head], { count: row.left_count, observationId: row.id }, times)
+    catchUp,
+
+    /**
+     * A body whose death was struck out has no name any more: every case waits for it again that it may be of. Where its
+     * animal was elsewhere they have gone on waiting.
+     */
+    async deathStruck(tx: Tx, deathId: string): Promise<void> {
+      const body = await findNamedBy(tx, deathId)
+      if (!body) return
+      const { happened_at: happenedAt, happened_on: happenedOn } = body
+      const mayBeOf = await findCasesIn(tx.manager, [body.enclosure_id], happenedAt, sinceWhen(happenedAt))
+      const ids = mayBeOf.map(({ id }) => id).filter((id) => !body.waiting_case_ids.includes(id))
+      if (ids.length === 0) return
+      const times = { happenedAt, happenedOn, recordedAt: tx.at, recordedBy: tx.actor.personId }
+      const heads = await writer.lockAll(tx, ids)
+      await enter(tx, heads, { count: body.left_count, observationId: body.id }, times)
+      await writer.settle(tx, ...ids)
+    },
+
+    /** A move that is entered later, or struck out, may put a batch where bodies were found. */
+    async placesChanged(tx: Tx, animalId: string): Promise<void> {
+      for (const head of await findRunningCasesOf(tx.manager, animalId)) {
+        if ((await listMissed(tx, head)).length === 0) continue
+        // what was read before the lock is read again under it
+        await writer.lockAll(tx, [head.id])
+        await catchUp(tx, head)
+        await writer.settle(tx, head.id)
       }
     },
 
