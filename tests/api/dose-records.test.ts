@@ -1,5 +1,7 @@
 import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
+import { anEnclosure } from '../builders/a-water.ts'
+import { aBathWater, aSchool } from '../builders/an-order.ts'
 import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { OrderRow } from '../../shared/contracts/orders.contract.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
@@ -216,6 +218,20 @@ describe('what was recorded under one order tells the amount of the next for tha
     expect(await trail()).not.toMatch(shows)
     await other.agent.get(`/api/orders/${number}?amounts=yes`).expect(200)
     expect(await trail()).toMatch(shows)
+  })
+
+  it('also where the two are for different tanks on one water', async () => {
+    const beside = await anEnclosure(api, 'QT-90')
+    const tank = await aBathWater(api, 'QT-91', [beside])
+    bath = { tank, school: await aSchool(api, tank.id, 91) }
+    over = await house.signedBath(bath)
+    await isEnded()
+    const keeper = await api.as('keeper')
+    expect(await read(keeper, `/api/orders/${over}`)).toMatch(shows)
+    const other = { tank: { ...beside, sumpId: tank.sumpId }, school: await aSchool(api, beside.id, 90) }
+    const number = await house.signedBath(other)
+    expect(await read(keeper, `/api/orders/${over}`)).not.toMatch(shows)
+    expect(JSON.parse(await read(house.technician, `/api/orders/${number}`)).amountsWithheld).toBe(false)
   })
 
   it('so a discrepancy of it names no amount to them, on the animal, on the worklist and in the trail', async () => {

@@ -8,10 +8,15 @@ import { anEnclosure, aTankAndSumpSheet, aValve, aWaterBody } from './a-water.ts
 import type { BuiltEnclosure } from './a-water.ts'
 
 /** A tank with its sump, its volume determined and confirmed: 2,181.4 L net, ± 2 %. */
-export async function aBathWater(api: TestApi, code: string): Promise<BuiltEnclosure & { sumpId: string }> {
+export async function aBathWater(
+  api: TestApi,
+  code: string,
+  joined: readonly BuiltEnclosure[] = [],
+): Promise<BuiltEnclosure & { sumpId: string }> {
   const tank = await anEnclosure(api, code)
   const sumpId = await aWaterBody(api, `S-${code}`)
   await aValve(api, `V-${code}`, [tank.waterBodyId, sumpId])
+  for (const other of joined) await aValve(api, `V-${other.code}`, [sumpId, other.waterBodyId])
   const id = api.nextId()
   await (
     await api.as('technician')
@@ -20,7 +25,7 @@ export async function aBathWater(api: TestApi, code: string): Promise<BuiltEnclo
     .send({
       id,
       happenedAt: '2026-11-30T14:00:00Z',
-      waterBodyIds: [tank.waterBodyId, sumpId],
+      waterBodyIds: [tank.waterBodyId, sumpId, ...joined.map(({ waterBodyId }) => waterBodyId)],
       sheet: aTankAndSumpSheet,
     })
     .expect(201)
