@@ -139,7 +139,9 @@ export function harbourLines(
   const date = shortDay(view.harbour.on)
   const colour = view.harbour.allMet && days <= 0 && 's-g'
   const toRun = days > 0 ? passageWords.daysToRun({ days }) : harbourWords(view)
-  const x = course.harbourX + 42
+  const beside = course.harbourX + 42
+  // behind the line of now and the step of today, where they would stand in the words
+  const x = beside - 12 < course.nowX && course.nowX < beside + 118 ? course.nowX + 14 : beside
   if (x + 118 > width) {
     const lead = { text: date, look: classNames('s-13 s-b', colour) }
     return [{ ...foot, key: 'harbour', text: `${passageWords.earliestClearance}, ${toRun}`, lead }]
