@@ -5,6 +5,7 @@ import { systemClock } from '../../server/platform/clock.ts'
 import { connectRuntime } from '../../server/platform/database/data-source.ts'
 import { createTransactions } from '../../server/platform/database/transactions.ts'
 import type { Transactions } from '../../server/platform/database/transactions.ts'
+import { noteWritten } from '../../server/platform/database/written-rows.ts'
 import { installation } from '../../server/platform/http/request-context.ts'
 import { cloneDatabase } from '../support/database.ts'
 
@@ -71,6 +72,14 @@ describe('a transaction', () => {
       await runner.connect()
     })
     await expect(second).rejects.toThrow('second connection')
+  })
+
+  it('is refused when it wrote a row that the trail marks and told of no act: the mark would be lost', async () => {
+    const silent = transactions.inTransaction(context, (tx) => {
+      noteWritten(tx.manager.queryRunner, 'products', '019a0000-0000-7000-8000-0000000000aa')
+      return Promise.resolve()
+    })
+    await expect(silent).rejects.toThrow('without an act in the audit trail: products')
   })
 
   it('answers busy when a lock is held too long', async () => {
