@@ -269,13 +269,23 @@ describe('what may be signed: an order', () => {
     const change = (set: string) =>
       owner.query(`UPDATE order_versions SET ${set} WHERE order_id = $1`, [draft.id])
     const other = await aSchool(api, tank.id, 2)
+    const sealWith = (signature: string) =>
+      owner.query(`UPDATE signed_texts SET signature = $2 WHERE subject_id = $1`, [draft.id, signature])
+    const { rows: seals } = await owner.query<{ signature: string }>(
+      `SELECT signature FROM signed_texts WHERE subject_id = $1`,
+      [draft.id],
+    )
+    await sealWith(Buffer.alloc(64, 7).toString('base64'))
+    expect(await listed()).toMatchObject({ record: 'broken', amountText: null, targetText: null })
+    await sealWith(String(seals[0]?.signature))
+    expect(await listed()).toMatchObject({ record: 'intact' })
     for (const [set, back, name] of [
       ['amount_entered_value = 43.6', 'amount_entered_value = 4.36', 'amount_entered_value'],
       ["starts_at = starts_at + interval '1 day'", "starts_at = starts_at - interval '1 day'", 'starts_at'],
       ['doses = 3', 'doses = 1', 'doses'],
     ] as const) {
       await change(set)
-      // the list does not check the signature, and gives no figure where something differs
+      // no figure is given where something differs
       expect(await listed()).toMatchObject({
         record: 'broken',
         amountText: null,

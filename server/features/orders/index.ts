@@ -106,7 +106,7 @@ export function createOrders(parts: OrdersOutside) {
     print,
     course,
     /** Orders with something to decide, and the plans of the open ones, for the worklist. */
-    work: () => readOrderWork(dataSource, now().toISOString()),
+    work: () => readOrderWork(dataSource, now().toISOString(), signing.signer),
     answerForPrint,
     routes: orderRoutes({
       service,

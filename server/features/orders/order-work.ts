@@ -1,6 +1,7 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import type { Signer } from '../../platform/signatures/signer.ts'
 import { leaveOut, readBlindness } from './blind-order.ts'
 import type { Blindness } from './blind-order.ts'
 import { readStandingHolds } from './order-work.reads.ts'
@@ -22,9 +23,14 @@ export interface OrderWork {
 }
 
 /** Signed orders that were not discontinued, each with its plan of doses. */
-export function openOrders(rows: readonly OrderReadRow[], now: string, blindness: Blindness) {
+export function openOrders(
+  rows: readonly OrderReadRow[],
+  now: string,
+  blindness: Blindness,
+  signer: Pick<Signer, 'check'>,
+) {
   return rows.flatMap((row) => {
-    const shown = leaveOut(presentOrderRow(row, now), blindness)
+    const shown = leaveOut(presentOrderRow(row, now, signer), blindness)
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
     if (!isOpen || row.starts_at === null || row.doses === null) return []
     const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
@@ -45,12 +51,16 @@ export interface OrdersAtWork {
  * What the worklist asks of orders, in one read: those with something to decide (drafts, proposals, held ones, those
  * whose doses nobody recorded in time), and the plans of the open ones.
  */
-export async function readOrderWork(db: Db, now: string): Promise<OrdersAtWork> {
+export async function readOrderWork(
+  db: Db,
+  now: string,
+  signer: Pick<Signer, 'check'>,
+): Promise<OrdersAtWork> {
   const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
   const blindness = await readBlindness(db, rows, now, { areAll: true })
   return {
-    waiting: waitingOrders(rows, holds, now, blindness),
-    open: openOrders(rows, now, blindness),
+    waiting: waitingOrders(rows, holds, now, blindness, signer),
+    open: openOrders(rows, now, blindness, signer),
     leftOutFor: (actor) =>
       new Set(rows.filter((row) => blindness.isLeftOutFor(row.id, actor)).map((row) => row.number)),
   }
@@ -61,9 +71,10 @@ function waitingOrders(
   holds: readonly StandingHoldRow[],
   now: string,
   blindness: Blindness,
+  signer: Pick<Signer, 'check'>,
 ): OrderWork[] {
   return rows.flatMap((row): OrderWork[] => {
-    const order = leaveOut(presentOrderRow(row, now), blindness)
+    const order = leaveOut(presentOrderRow(row, now, signer), blindness)
     const waits = row.stage !== 'none' || order.phase === 'held' || order.phase === 'expired'
     if (!waits || order.phase === 'discontinued') return []
     const hold = order.phase === 'held' ? holds.find((one) => one.order_id === row.id) : undefined

@@ -9,6 +9,7 @@ import { isOrderText } from './is-order-text.ts'
 import type { ReadText } from './compare-copies.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { OrderReadRow } from './orders.reads.ts'
+import type { Signer } from '../../platform/signatures/signer.ts'
 import { missingLinks } from './signing-chain.ts'
 
 /** What is made of a row only once: a list asks each of its rows several things, and some cost much. */
@@ -109,13 +110,17 @@ export function blindKeys(row: OrderReadRow, now: string): string[] {
     .filter((key) => !row.done_keys.includes(key))
 }
 
-export function presentOrderRow(row: OrderReadRow, now: string): OrderRow {
+/** Whether the text in force is still the one that was sealed; a key from elsewhere says nothing against it. */
+const isSealBroken = ({ signed_text, seal }: OrderReadRow, signer: Pick<Signer, 'check'>): boolean =>
+  signed_text !== null && seal !== null && signer.check(signed_text, seal) === 'broken'
+
+export function presentOrderRow(row: OrderReadRow, now: string, signer: Pick<Signer, 'check'>): OrderRow {
   const standing = standingOfRow(row)
   const phase = orderPhase(standing, now)
   const content = signedContent(row)
   const draft = row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields)
   const isOpen = phase === 'not-started' || phase === 'in-progress' || phase === 'held'
-  const record = recordOf(row)
+  const record = isSealBroken(row, signer) ? 'broken' : recordOf(row)
   const isBroken = record === 'broken'
   const next = standing.signed?.planned.find((dose) => !row.done_keys.includes(dose.key))
   return {

@@ -63,6 +63,8 @@ export interface SealedVersion {
 }
 
 export function createOrderQueries(parts: OrderQueriesParts) {
+  const { signer } = parts.signing
+
   async function rowOf(number: string) {
     const row = await readOrder(parts.dataSource, number)
     if (!row) throw new Problem('not-found')
@@ -95,7 +97,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const read = await readOrders(parts.dataSource, query)
       const areAll = query.q === undefined && query.enclosureCode === undefined
       const blindness = await readBlindness(parts.dataSource, read, now, { areAll })
-      const rows = read.map((row) => leaveOut(presentOrderRow(row, now), blindness))
+      const rows = read.map((row) => leaveOut(presentOrderRow(row, now, signer), blindness))
       const { phase } = query
       const found = rows.filter((row) =>
         phase === undefined ? true : phase === 'open' ? !ended.has(row.phase) : row.phase === phase,
@@ -132,7 +134,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const now = parts.now().toISOString()
       const blindness = await readBlindness(parts.dataSource, [row], now, { areAll: false })
       const isBlind = blindness.isLeftOutFor(row.id, actor)
-      const shown = presentOrderRow(row, now)
+      const shown = presentOrderRow(row, now, signer)
       const inForce = sealed[0]
       return {
         ...shown,
@@ -196,7 +198,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     async open() {
       const now = parts.now().toISOString()
       const rows = await readOrders(parts.dataSource, {})
-      return openOrders(rows, now, await readBlindness(parts.dataSource, rows, now, { areAll: true }))
+      return openOrders(rows, now, await readBlindness(parts.dataSource, rows, now, { areAll: true }), signer)
     },
 
     /** Holds and ends of an order, the newest first. */
@@ -209,7 +211,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         return this.sealed(number, undefined)
       const { versionNo, at } = lastSigning(row.chain) ?? { versionNo: 0, at: row.created_at }
       return {
-        row: presentOrderRow(row, parts.now().toISOString()),
+        row: presentOrderRow(row, parts.now().toISOString(), signer),
         versionId: null,
         versionNo,
         content: null,
@@ -228,7 +230,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       if (!wanted) throw new Problem('not-found', { detail: 'This order has no such signed version.' })
       const { content, isChanged, block } = await readVersion(row, wanted)
       return {
-        row: presentOrderRow(row, parts.now().toISOString()),
+        row: presentOrderRow(row, parts.now().toISOString(), signer),
         recorded: await readRecordedDoses(parts.dataSource, row.id),
         versionId: wanted.id,
         versionNo: wanted.version_no,

@@ -1,5 +1,6 @@
 import { containing } from '../../platform/database/like.ts'
 import type { Db } from '../../platform/database/db.ts'
+import type { Seal } from '../../platform/signatures/signer.ts'
 import type { SigningChain } from './signing-chain.ts'
 
 /** The columns of a signed version, and whom it names. */
@@ -32,6 +33,8 @@ export interface OrderReadRow {
   signed_at: Date | null
   signed_by_name: string | null
   signed_text: string | null
+  /** What the text was sealed with; null with the text. */
+  seal: Seal | null
   held: boolean
   ended: boolean
   done_keys: string[]
@@ -63,6 +66,7 @@ const columns = `
   o.created_at, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
   coalesce(v.agent, f.agent) AS agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
   v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
+  CASE WHEN t.id IS NULL THEN NULL ELSE json_build_object('hash', t.hash, 'signature', t.signature, 'keyId', t.key_id) END AS seal,
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
              ORDER BY e.recorded_at DESC, e.happened_at DESC LIMIT 1), false) AS held,
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
