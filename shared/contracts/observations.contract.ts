@@ -66,6 +66,16 @@ export const Observation = z.object({
     .nullable()
     .describe('A veterinarian has read it'),
   voidedReason: z.string().nullable().describe('Why it was struck out, where it was'),
+  deathsStanding: z
+    .array(
+      z.object({
+        accession: AccessionNumber,
+        count: z.int().describe('How many it names as dead'),
+      }),
+    )
+    .describe(
+      'Deaths that a struck observation had entered and that stand until they are struck out themselves',
+    ),
   notice: z.object({ id: RecordId, state: NoticeState }).nullable().describe('Fate of an urgent call'),
 })
 export type Observation = z.infer<typeof Observation>

@@ -85,6 +85,10 @@ export const quarantineWords = defineMessages({
   readWith: (p: { words: string }) => `: ${p.words}`,
   haveRead: 'I have read it',
   struck: (p: { reason: string }) => `Struck out: ${p.reason}`,
+  deathsStand: (p: { count: number }) =>
+    p.count === 1
+      ? 'A death that it entered still stands. If it was a mistake too, strike it out at'
+      : `${p.count} deaths that it entered still stand. If they were a mistake too, strike them out at`,
   keptFirst: (p: { at: string }) => `sent later, at ${p.at}`,
   clockDoubtful: 'The clock of the device ran ahead; the time of receipt stands.',
   writeObservation: 'Write an observation',

@@ -175,14 +175,10 @@ describe('bodies without a name where two cases live', () => {
     const { accession } = await aStranger('OB-ELSE-2')
     expect((await name(id, { deaths: [{ id: api.nextId(), accession, count: 1 }] })).status).toBe(201)
     expect(await standing()).toEqual(waits)
-    // the death of a named animal stands when the look is struck out, and so does the wait for what explains it
-    await (
-      await api.as('keeper')
-    ).agent
-      .post(`/api/observations/${id}/void`)
-      .set('Idempotency-Key', newKey())
-      .send({ reason: 'Entered at the wrong tank' })
-      .expect(200)
+    // the death of a named animal stands when the look is struck out, which says so, and so does the wait for what
+    // explains it
+    const struck = await strike('keeper', id)
+    expect([struck.status, struck.body.deathsStanding]).toEqual([200, [{ accession, count: 1 }]])
     expect(await standing()).toEqual(waits)
     await explain(accession, 'explained')
     expect(await standing()).toEqual([

@@ -48,6 +48,7 @@ export function presentObservation(row: ObservationReadRow): Observation {
       ? { by: row.reviewed_by ?? '', at: row.reviewed_at.toISOString(), words: row.reviewed_words }
       : null,
     voidedReason: row.voided_reason,
+    deathsStanding: row.deaths_standing,
     notice:
       row.notice_id === null
         ? null

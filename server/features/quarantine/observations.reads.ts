@@ -42,6 +42,7 @@ export interface ObservationReadRow {
   reviewed_at: Date | null
   reviewed_words: string | null
   voided_reason: string | null
+  deaths_standing: { accession: string; count: number }[]
   notice_id: string | null
   notice_seen: number
   notice_sent: number
@@ -89,7 +90,13 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
             CASE WHEN b.id IS NULL AND v.id IS NULL THEN o.unassigned_dead ELSE 0 END AS bodies_to_name,
             b.named_count AS bodies_named, b.reason AS bodies_reason, bp.printed_name AS bodies_by,
             b.recorded_at AS bodies_at, o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,
-            r.words AS reviewed_words, v.reason AS voided_reason, n.id AS notice_id,
+            r.words AS reviewed_words, v.reason AS voided_reason,
+            CASE WHEN v.id IS NULL THEN '[]'::json
+                 ELSE (SELECT coalesce(json_agg(json_build_object('accession', a.accession, 'count', d.seen_count)
+                                                ORDER BY a.accession), '[]')
+                         FROM observation_deaths k JOIN live_deaths d ON d.id = k.death_id
+                         JOIN animals a ON a.id = d.animal_id WHERE k.observation_id = o.id) END AS deaths_standing,
+            n.id AS notice_id,
             (SELECT count(*)::int FROM notice_acts a WHERE a.notice_id = n.id AND a.kind = 'seen'
                 AND ${seenByAnother('a')}) AS notice_seen,
             (SELECT count(*)::int FROM notice_deliveries d

@@ -109,6 +109,20 @@ function ObservationWords({ row, numbered, zone }: { row: Observation; numbered:
           <s>{said}</s> {words.struck({ reason: row.voidedReason })}
         </>
       )}
+      {row.deathsStanding.length > 0 ? (
+        <span className="t-note block">
+          {words.deathsStand({ count: row.deathsStanding.reduce((sum, { count }) => sum + count, 0) })}
+          {row.deathsStanding.map(({ accession }, i) => (
+            <Link
+              key={`${accession} ${String(i)}`}
+              className="inline-block min-h-6 ps-1"
+              to={paths.animal(accession)}
+            >
+              {accession}
+            </Link>
+          ))}
+        </span>
+      ) : null}
       {row.origin === 'outbox' ? (
         <span className="t-note block">
           {row.timeDoubtful ? words.clockDoubtful : words.keptFirst({ at: sayTime(row.recordedAt, zone) })}
