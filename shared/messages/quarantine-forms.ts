@@ -168,6 +168,11 @@ export const caseForms = defineMessages({
 
 /** Whose the bodies of an observation were. */
 export const observationForms = defineMessages({
+  strikeOut: 'Strike out',
+  strikeQuestion: (p: { enclosure: string }) => `Strike out what was seen at ${p.enclosure}?`,
+  strikeHint:
+    'It stays readable, with your reason. Bodies without a name that it found are waited for no longer. A count that it gave, and deaths of named animals, stay: correct those at the animal.',
+  observationStruck: 'Struck out',
   nameBodies: 'Name the bodies',
   bodiesQuestion: (p: { enclosure: string }) => `Whose bodies were those in ${p.enclosure}?`,
   bodiesAct: 'Record whose they were',

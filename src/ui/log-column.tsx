@@ -18,6 +18,8 @@ export interface LogEntry {
   what: ReactNode
   /** Who wrote it: name and role. */
   who: string
+  /** What can be done with it, at the end of that line. */
+  act?: ReactNode
 }
 
 export interface LogColumnProps {
@@ -129,7 +131,9 @@ function LogBody({
                 <time dateTime={entry.instant}>{entry.time}</time>
                 <div>
                   {entry.what}
-                  <span className="log-who">{entry.who}</span>
+                  <span className="log-who">
+                    {entry.who} {entry.act}
+                  </span>
                 </div>
               </div>
             </li>

@@ -200,6 +200,15 @@ describe('a keeper with wet hands, at 390 px', () => {
     await desktop.getByRole('button', { name: 'I have read it' }).click()
     await desktop.getByText(/^Read by Test veterinarian/).waitFor()
     expect((await seen()).rows[0].reviewed).toMatchObject({ by: 'Test veterinarian' })
+
+    // one that was made by mistake is struck out with a reason, and stays readable
+    await desktop.getByRole('button', { name: 'Strike out' }).first().click()
+    const question = desktop.getByRole('dialog', { name: /^Strike out what was seen at/ })
+    await question.getByLabel('Reason').fill('seen at the tank beside it')
+    await expectSound(desktop, 'observation-strike')
+    await question.getByRole('button', { name: 'Strike out' }).click()
+    await desktop.getByText('Struck out: seen at the tank beside it').waitFor()
+    expect((await seen()).rows[0].voidedReason).toBe('seen at the tank beside it')
   })
 
   it('is told that an urgent call was not sent, whom to telephone, and later who has seen it', async () => {

@@ -2,7 +2,11 @@ import { useMutation, useQueryClient } from '@tanstack/react-query'
 import * as events from '../../../shared/contracts/case-events.contract.ts'
 import { clearCase } from '../../../shared/contracts/clearance.contract.ts'
 import type { BodyOf, Contract } from '../../../shared/contracts/contract.ts'
-import { nameBodies, reviewObservation } from '../../../shared/contracts/observations.contract.ts'
+import {
+  nameBodies,
+  reviewObservation,
+  voidObservation,
+} from '../../../shared/contracts/observations.contract.ts'
 import * as cases from '../../../shared/contracts/quarantine.contract.ts'
 import { api } from '../../lib/api-client.ts'
 import type { CallOptions } from '../../lib/api-client.ts'
@@ -99,3 +103,10 @@ export const useReviewObservation = () =>
 
 export const useNameBodies = (id: string) =>
   useQuarantineMutation(nameBodies, (body: BodyOf<typeof nameBodies>) => ({ params: { id }, body }))
+
+export const useStrikeObservation = (id: string) =>
+  useQuarantineMutation(voidObservation, ({ reason, key }: { reason: string; key: string }) => ({
+    params: { id },
+    key,
+    body: { reason },
+  }))

@@ -22,6 +22,7 @@ import { Tag } from '../../ui/tag.tsx'
 import { BodiesDialog } from './bodies-dialog.tsx'
 import { useReviewObservation } from './mutations.ts'
 import { observationsQuery } from './queries.ts'
+import { StrikeObservationDialog } from './strike-observation-dialog.tsx'
 
 /** What was seen, the newest first: of one case, or of all with their numbers. A veterinarian notes here that they read it. */
 export function ObservationLog({
@@ -57,6 +58,7 @@ export function ObservationLog({
       instant: row.happenedAt,
       what: <ObservationWords row={row} numbered={number === undefined} zone={zone} />,
       who: row.recordedBy,
+      act: <Strike row={row} zone={zone} />,
     }
     day = date
     return entry
@@ -176,6 +178,23 @@ function ObservationWords({ row, numbered, zone }: { row: Observation; numbered:
           {words.haveRead}
         </Button>
       ) : null}
+    </>
+  )
+}
+
+/** Whoever wrote it, or a veterinarian, strikes it out: quietly, at the end of its line. */
+function Strike({ row, zone }: { row: Observation; zone: string }) {
+  const me = useMe()
+  const may = useMay('chart.write')
+  const [asked, setAsked] = useState(false)
+  if (row.voidedReason !== null || (row.recordedById !== me.id && !may.allowed)) return null
+  return (
+    <>
+      <button type="button" className="log-act" onClick={() => setAsked(true)}>
+        {observationForms.strikeOut}
+        <span className="visually-hidden"> {sayMoment(row.happenedAt, zone, new Date().toISOString())}</span>
+      </button>
+      {asked ? <StrikeObservationDialog observation={row} onBack={() => setAsked(false)} /> : null}
     </>
   )
 }
