@@ -39,7 +39,8 @@ export const figureChanged = defineMessages({
     'The strength of this product, or something else about it, is not what was entered. Do not use it: have it entered anew from its label, choose that one, and tell the administrator.',
   product_lots:
     'This lot is not what was entered. Do not use it: have it entered anew from its container, choose that one, and tell the administrator.',
-  dose_lines: 'This dose line is not what was entered. Choose another, and tell the administrator.',
+  dose_lines:
+    'A dose line of this drug is not what was entered. Have it proposed and confirmed anew, and tell the administrator.',
   volume_determinations:
     'The volume of this water is not the one that was determined. Determine it anew, have it confirmed, and tell the administrator.',
 })

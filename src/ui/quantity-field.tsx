@@ -45,7 +45,7 @@ export function QuantityField(props: QuantityFieldProps) {
   const state = useQuantityField(props)
   const said = wrong ?? state.fault
   const below = state.working ? partWords.workingOut : (state.workedOut ?? hint)
-  const shown = (unit: string) => units.find((option) => option.unit === unit)?.label ?? unit
+  const { shown } = state
 
   const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
     // Enter works the arithmetic out first and must not send the form with unread text
@@ -80,7 +80,8 @@ export function QuantityField(props: QuantityFieldProps) {
               <span className="control-suffix is-select">
                 <select
                   aria-label={partWords.unit({ field: label })}
-                  value={state.askedUnit ?? quantity.unit}
+                  // the unit of the number as it stands: what is seen is what goes out, also while it is asked
+                  value={quantity.unit}
                   disabled={disabled}
                   onChange={(event) => state.changeUnit(event.target.value)}
                 >

@@ -12,6 +12,7 @@ export interface TypedQuantity {
 }
 
 interface Options extends QuantityTools {
+  units: readonly { unit: string; label?: string }[]
   quantity: TypedQuantity
   onChange: (next: TypedQuantity) => void
   allowNegative?: boolean
@@ -21,7 +22,8 @@ interface Options extends QuantityTools {
  * The behaviour of a number-and-unit field, without its looks: reading, working out, and the question that a
  * changed unit asks.
  */
-export function useQuantityField({ quantity, onChange, allowNegative, ...given }: Options) {
+export function useQuantityField({ quantity, onChange, units, allowNegative, ...given }: Options) {
+  const shown = (unit: string) => units.find((option) => option.unit === unit)?.label ?? unit
   const context = useContext(QuantityToolsContext)
   const evaluate = given.evaluate ?? context.evaluate
   const convert = given.convert ?? context.convert
@@ -43,12 +45,14 @@ export function useQuantityField({ quantity, onChange, allowNegative, ...given }
 
   const type = (text: string) => {
     setWorkedOut(undefined)
+    // a number typed after a unit was chosen is in that unit: what is typed answers what was asked
+    const unit = askedUnit ?? quantity.unit
     setAskedUnit(null)
     const read = readQuantityText(text)
     // a fault that has been pointed out goes as soon as it is mended, and a new one waits until the field is left
     if (read.kind !== 'refused') setFault(undefined)
     latest.current = text
-    onChange({ value: text, unit: quantity.unit })
+    onChange({ value: text, unit })
   }
 
   const settle = async () => {
@@ -69,14 +73,16 @@ export function useQuantityField({ quantity, onChange, allowNegative, ...given }
     if (latest.current !== typed) return
     if (!answer.ok) return setFault(answer.says ?? partWords.cannotWorkOut)
     if (!judge(answer.value)) return
-    setWorkedOut(partWords.workedOut({ typed, value: answer.value, unit: quantity.unit }))
+    setWorkedOut(partWords.workedOut({ typed, value: answer.value, unit: shown(quantity.unit) }))
     onChange({ value: answer.value, unit: quantity.unit })
   }
 
   const changeUnit = (unit: string) => {
     if (unit === quantity.unit) return
     setWorkedOut(undefined)
-    if (readQuantityText(quantity.value).kind === 'empty') onChange({ value: quantity.value, unit })
+    const { kind } = readQuantityText(quantity.value)
+    // text that is no number yet has nothing to keep or to convert
+    if (kind === 'empty' || kind === 'refused') onChange({ value: quantity.value, unit })
     else setAskedUnit(unit)
   }
 
@@ -93,5 +99,5 @@ export function useQuantityField({ quantity, onChange, allowNegative, ...given }
     setAskedUnit(null)
   }
 
-  return { fault, workedOut, working, askedUnit, converted, type, settle, changeUnit, answerUnit }
+  return { fault, workedOut, working, askedUnit, converted, shown, type, settle, changeUnit, answerUnit }
 }

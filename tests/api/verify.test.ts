@@ -273,6 +273,52 @@ describe('a kept row that another hand changed', () => {
     expect([signed.status, signed.body.detail]).toEqual([409, expect.stringContaining('Determine it anew')])
   })
 
+  it('is no volume to sign a dose by when other bodies were put under it', async () => {
+    const bath = await house.tankWithSchool()
+    const draft = await aDraft(api, house.fieldsOf(bath))
+    await byHand([
+      `UPDATE volume_determination_bodies SET water_body_id = (SELECT id FROM water_bodies WHERE id <> $1 LIMIT 1)
+        WHERE water_body_id <> $1 AND determination_id IN
+          (SELECT b.determination_id FROM volume_determination_bodies b WHERE b.water_body_id = $1)`,
+      bath.tank.waterBodyId,
+    ])
+    const signed = await signDraft(api, draft)
+    expect([signed.status, signed.body.code]).toEqual([
+      409,
+      expect.stringMatching(/not-as-entered|order-incomplete/),
+    ])
+  })
+
+  it('is no dose line to hold an order against, though the order names none', async () => {
+    const bath = await house.tankWithSchool()
+    const draft = await aDraft(api, house.fieldsOf(bath, { doseLineId: null }))
+    await byHand([`UPDATE dose_lines SET high = high * 100 WHERE agent = 'formalin'`])
+    const signed = await signDraft(api, draft)
+    expect([signed.status, signed.body.detail]).toEqual([
+      409,
+      expect.stringContaining('dose line of this drug'),
+    ])
+    await byHand([`UPDATE dose_lines SET high = high / 100 WHERE agent = 'formalin'`])
+  })
+
+  it('is no lot to sign a dose by when its recall was taken away', async () => {
+    const bath = await house.tankWithSchool()
+    const fields = house.fieldsOf(bath)
+    const draft = await aDraft(api, fields)
+    const vet = await api.as('veterinarian')
+    const recall = api.nextId()
+    await vet.agent
+      .post(`/api/lots/${fields.lotId}/events`)
+      .send({ id: recall, kind: 'recalled', note: 'by its maker' })
+      .expect(201)
+    await byHand([`DELETE FROM lot_events WHERE id = $1`, recall])
+    const signed = await signDraft(api, draft)
+    expect([signed.status, signed.body.detail]).toEqual([
+      409,
+      expect.stringContaining('This lot is not what'),
+    ])
+  })
+
   it('is reported though it bears a time before anything else was written', async () => {
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)

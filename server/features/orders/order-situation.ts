@@ -13,7 +13,7 @@ import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import { figureChanged, orderMissing, orderProblemWords } from '../../../shared/messages/orders.ts'
 import type { OrderField } from '../../../shared/messages/orders.ts'
-import { readChangedTables } from '../../platform/audit/changed-rows.ts'
+import { isAsActedUpon, readChangedTables } from '../../platform/audit/changed-rows.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { readGivenBefore } from './agent-history.reads.ts'
@@ -153,18 +153,28 @@ export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields
 async function readChangedFigures(
   db: Db,
   fields: BathOrderFields,
-  { product, water }: { product: Product | null; water: BathSituation['water'] },
+  { product, lines, water }: { product: Product | null; lines: DoseLine[]; water: BathSituation['water'] },
 ): Promise<string[]> {
+  // a lot that is not of this product is refused for that
+  const lotId = product?.lots.find(({ id }) => id === fields.lotId)?.id ?? null
+  const volumeId = water.volume?.id ?? null
   const used = [
     ['products', fields.productId],
-    // a lot that is not of this product is refused for that
-    ['product_lots', product?.lots.find(({ id }) => id === fields.lotId)?.id ?? null],
+    ['product_lots', lotId],
     ['dose_lines', fields.doseLineId],
-    ['volume_determinations', water.volume?.id ?? null],
+    // without a line of its own an order is held against every line of the drug
+    ...lines.map(({ id }) => ['dose_lines', id] as const),
+    ['volume_determinations', volumeId],
   ] as const
   const rows = used.flatMap(([table, key]) => (key === null ? [] : [[table, key] as const]))
-  const changed = await readChangedTables(db, rows)
-  return used.filter(([table]) => changed.includes(table)).map(([table]) => figureChanged[table])
+  const changed = new Set<string>(await readChangedTables(db, rows))
+  // a recall that was taken away, or the withdrawal of a volume, leaves no row that is changed
+  if (lotId !== null && !(await isAsActedUpon(db, 'lot', lotId))) changed.add('product_lots')
+  if (volumeId !== null && !(await isAsActedUpon(db, 'volume', volumeId)))
+    changed.add('volume_determinations')
+  return [...new Set(used.map(([table]) => table))]
+    .filter((table) => changed.has(table))
+    .map((table) => figureChanged[table])
 }
 
 /** Reads the facts of an instant and judges the order by them: the one way, while writing, at signing and at the dose. */
@@ -181,8 +191,10 @@ export async function readSituation(
     bring: options.stage === 'start' ? [] : fields.animalIds,
   })
   if (!situation) throw noWaterProblem()
+  const lines = product === null ? [] : await parts.doseLinesOf(product.agent)
   const changed = await readChangedFigures(options.db ?? parts.dataSource, fields, {
     product,
+    lines,
     water: situation.water,
   })
   const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
@@ -191,7 +203,7 @@ export async function readSituation(
       ? judgeBathOrder(
           situation.base,
           draftOf(fields, given),
-          chosenOf(product, line, await parts.doseLinesOf(product.agent), fields.lotId),
+          chosenOf(product, line, lines, fields.lotId),
           {},
           options.stage,
         )

@@ -13,3 +13,20 @@ export async function readChangedTables(
   )
   return changed.map(({ name }) => name)
 }
+
+/**
+ * Whether everything that acts upon a subject ever wrote is there and as they wrote it: a row taken away, such as the
+ * withdrawal of a volume, is seen only so.
+ */
+export async function isAsActedUpon(db: Db, kind: string, id: string): Promise<boolean> {
+  const [found]: { changed: boolean }[] = await db.query(
+    `SELECT EXISTS (
+       SELECT 1 FROM audit_entries a
+        CROSS JOIN LATERAL jsonb_each(coalesce(a.text::jsonb -> 'rows', '{}')) AS written (name, marks)
+        CROSS JOIN LATERAL jsonb_object_keys(written.marks) AS key
+        WHERE a.subject_kind = $1 AND a.subject_id = $2
+          AND NOT row_is_as_written(to_regclass(written.name), key)) AS changed`,
+    [kind, id],
+  )
+  return found?.changed === false
+}

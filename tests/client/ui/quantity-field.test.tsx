@@ -190,6 +190,27 @@ describe('a changed unit', () => {
     expect(onQuantity).not.toHaveBeenCalled()
   })
 
+  it('is the unit of the number that is typed next, whatever was asked; until then the old one is seen', async () => {
+    const onQuantity = vi.fn()
+    const { place } = await draw(<Volume start={start} convert={toGallons} onQuantity={onQuantity} />)
+    await choose(select(place), 'gal_us')
+    expect(select(place).value).toBe('L')
+    await type(input(place), '2')
+    expect(onQuantity).toHaveBeenLastCalledWith({ value: '2', unit: 'gal_us' })
+    expect(select(place).value).toBe('gal_us')
+    expect(place.textContent).not.toContain('Keep')
+  })
+
+  it('is simply taken beside text that is no number, and stays when a number is typed', async () => {
+    const onQuantity = vi.fn()
+    const { place } = await draw(<Volume onQuantity={onQuantity} />)
+    await enter(place, '12 ppm')
+    await choose(select(place), 'gal_us')
+    await type(input(place), '12')
+    expect(onQuantity).toHaveBeenLastCalledWith({ value: '12', unit: 'gal_us' })
+    expect(select(place).value).toBe('gal_us')
+  })
+
   it('offers no conversion between units that have none', async () => {
     const { place } = await draw(<Volume start={start} convert={() => ({ ok: false })} />)
     await choose(select(place), 'gal_us')
