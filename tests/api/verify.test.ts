@@ -303,13 +303,22 @@ describe('a kept row that another hand changed', () => {
 
   it('is no lot to sign a dose by when its recall was taken away', async () => {
     const bath = await house.tankWithSchool()
-    const fields = house.fieldsOf(bath)
-    const draft = await aDraft(api, fields)
+    const product = await aProduct(api, {})
+    const draft = await aDraft(
+      api,
+      house.fieldsOf(bath, {
+        productId: product.id,
+        lotId: product.lotId,
+        target: { value: '2', unit: 'mg/L' },
+        basis: 'active',
+        division: { value: '0.01', unit: 'g' },
+      }),
+    )
     const vet = await api.as('veterinarian')
     const recall = api.nextId()
     await vet.agent
-      .post(`/api/lots/${fields.lotId}/events`)
-      .send({ id: recall, kind: 'recalled', note: 'by its maker' })
+      .post(`/api/lots/${product.lotId}/events`)
+      .send({ id: recall, kind: 'recalled', happenedAt: '2026-12-01T17:00:00Z', note: 'by its maker' })
       .expect(201)
     await byHand([`DELETE FROM lot_events WHERE id = $1`, recall])
     const signed = await signDraft(api, draft)

@@ -9,6 +9,7 @@ import { findUnit } from '../units/find-unit.ts'
 import { unitOf } from '../units/unit-of.ts'
 import type { ConcentrationUnit } from '../cautions/caution-facts.ts'
 import type { BathOrderDraft, ChosenProduct } from './bath-order-draft.ts'
+import { longestContactInADay } from './longest-contact-in-a-day.ts'
 
 /** The facts of the water and its animals, as the server assembled them; order and lot are still to be put in. */
 export type BathFacts = Omit<CautionFacts, 'order' | 'lot' | 'agent'>
@@ -100,7 +101,10 @@ export function orderFacts(
       contactMinutesPerDay:
         draft.timing === 'indefinite'
           ? notApplicable()
-          : orUnknown(minutes === null ? null : minutesPerDay(minutes, draft), 'the order'),
+          : orUnknown(
+              minutes === null ? null : longestContactInADay(minutes, draft.doses, draft.intervalHours),
+              'the order',
+            ),
       setting: orUnknown(draft.setting, 'the order'),
       startsAt: orUnknown(draft.startsAt, 'the order'),
       endsAt: orUnknown(endsAt, 'the order'),
@@ -140,12 +144,6 @@ export function orderFacts(
     lifeSupport: { ...base.lifeSupport, lights: fill(base.lifeSupport.lights, said.lights) },
     animals: { ...base.animals, withoutExperience: experience },
   }
-}
-
-/** What the contacts of one day make together: no more of them than are planned, and no longer than a day or the one contact. */
-function minutesPerDay(minutes: number, { intervalHours, doses }: BathOrderDraft): number {
-  const dosesPerDay = intervalHours !== null && intervalHours < 24 ? Math.min(24 / intervalHours, doses) : 1
-  return Math.min(minutes * Math.max(1, dosesPerDay), Math.max(minutes, 24 * 60))
 }
 
 function amountFact(dose: BathDose | null, unit: 'g' | 'mL'): Fact<number> {
