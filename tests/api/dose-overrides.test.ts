@@ -3,7 +3,7 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { verifyOverrides } from '../../server/features/administrations/index.ts'
 import { aFormalinHouse } from '../builders/a-bath.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
-import { readingsNow } from '../builders/an-order.ts'
+import { aDraft, readingsNow, signDraft } from '../builders/an-order.ts'
 import { textOf } from '../pdf/support/poppler.ts'
 import { newKey, password, startApi, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
@@ -174,5 +174,34 @@ describe('a stop found at the dose', () => {
     const refused = await override(other.number, { ruleId: 'R47', code: beyond.code, finding: 'any' })
     expect([refused.status, refused.body.code]).toEqual([409, 'caution-stops'])
     expect(refused.body.detail).toContain('Nobody may override')
+  })
+})
+
+describe('a bath that runs under an order whose versions were taken away', () => {
+  /** As the owner, past the constraints that join the tables. */
+  async function takeVersions(number: string): Promise<void> {
+    await owner.query('BEGIN')
+    await owner.query(`SET LOCAL session_replication_role = replica`)
+    await owner.query(
+      `DELETE FROM order_versions WHERE order_id = (SELECT id FROM orders WHERE number = $1)`,
+      [number],
+    )
+    await owner.query('COMMIT')
+  }
+
+  it('leaves what is in that water unknown, which stops the next order for it', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await house.record(number).expect(201)
+    const second = await aDraft(api, house.fieldsOf(bath))
+    const codes = async () => {
+      const { draft } = (await vet.agent.get(`/api/orders/${second.number}`).expect(200)).body
+      const { cautions } = (await vet.agent.post('/api/order-previews').send(draft).expect(200)).body
+      return cautions.map((one: { code: string; level: string }) => `${one.level} ${one.code}`)
+    }
+    expect(await codes()).toContain('stop same-agent-together')
+    await takeVersions(number)
+    expect(await codes()).toContain('stop agent-history-unknown')
+    expect((await signDraft(api, second)).status).toBe(409)
   })
 })

@@ -35,16 +35,16 @@ export function readAgentUses(
                  ELSE v.starts_at + (coalesce(v.interval_hours, 0) * (v.doses - 1)) * interval '1 hour'
                       + v.contact_minutes * interval '1 minute' END AS ends_at,
             v.doses, v.interval_hours, v.contact_minutes,
-            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+            coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
                        WHERE x.order_id = o.id AND ${happenedBy('d', '$2')}), '{}') AS done_keys,
             coalesce((SELECT json_agg(json_build_object('at', d.happened_at, 'ended',
                                (SELECT max(s.happened_at) FROM live_bath_stops s
                                  WHERE s.dose_id = d.id AND ${happenedBy('s', '$2')})))
-                        FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+                        FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
                        WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$2')}), '[]') AS given,
             (SELECT min(e.happened_at) FROM order_events e
               WHERE e.order_id = o.id AND e.kind = 'discontinued' AND ${happenedBy('e', '$2')}) AS discontinued_at,
-            (SELECT max(d.happened_at) FROM live_doses d JOIN order_versions w ON w.id = d.order_version_id
+            (SELECT max(d.happened_at) FROM live_doses d JOIN orders_of_doses w ON w.dose_id = d.id
               WHERE w.order_id = o.id AND d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$2')}) AS last_given_at
        FROM orders o
        JOIN order_versions v ON v.order_id = o.id
@@ -113,6 +113,30 @@ export function readCarriedAgents(
   )
 }
 
+/**
+ * When doses went into a water under a signed version that is gone: nobody can tell of which agent, nor for how long. Each is
+ * remembered as an agent out of the water is. Where they went is where their order is for.
+ */
+export async function readDosesOfGoneVersions(
+  db: Db,
+  sources: readonly WaterSourceSpell[],
+  at: Date,
+): Promise<Date[]> {
+  const rows: { happened_at: Date }[] = await db.query(
+    `SELECT d.happened_at FROM live_doses d JOIN orders o ON o.id = d.order_id
+      WHERE d.kind IN ('given', 'recorded') AND ${happenedBy('d', '$2')}
+        AND NOT EXISTS (SELECT 1 FROM order_versions v WHERE v.id = d.order_version_id)
+        AND NOT EXISTS (SELECT 1 FROM live_bath_stops s
+                         WHERE s.dose_id = d.id AND s.happened_at <= $2::timestamptz - $3 * interval '1 day')
+        AND EXISTS (
+              SELECT 1 FROM jsonb_to_recordset($1::jsonb) AS source("from" timestamptz, "until" timestamptz, "enclosureIds" jsonb)
+               WHERE d.happened_at >= source."from" AND d.happened_at < source."until"
+                 AND source."enclosureIds" @> to_jsonb(o.enclosure_id::text))`,
+    [sourceRows(sources), at, daysRemembered],
+  )
+  return rows.map((row) => row.happened_at)
+}
+
 /** Milligrams per litre of an agent that came into a water with the doses of the 24 h before an instant. */
 export async function readGivenInLast24h(
   db: Db,
@@ -157,8 +181,8 @@ export async function readGivenBefore(
   const [row]: { doses: number; last_at: Date | null; still_in: number }[] = await db.query(
     `SELECT count(DISTINCT d.dose_key)::int AS doses, max(d.happened_at) AS last_at,
             (count(*) FILTER (WHERE NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)))::int AS still_in
-       FROM live_doses d JOIN order_versions v ON v.id = d.order_version_id
-      WHERE v.order_id = $1 AND d.kind IN ('given', 'recorded')`,
+       FROM live_doses d JOIN orders_of_doses w ON w.dose_id = d.id
+      WHERE w.order_id = $1 AND d.kind IN ('given', 'recorded')`,
     [orderId],
   )
   return {

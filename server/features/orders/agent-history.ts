@@ -9,6 +9,7 @@ import {
   daysRemembered,
   readAgentUses,
   readCarriedAgents,
+  readDosesOfGoneVersions,
   readFirstDoseThatMatters,
   readGivenInLast24h,
 } from './agent-history.reads.ts'
@@ -46,6 +47,7 @@ export async function readAgentHistory(
   const sources = first ? await waterQuestions.waterSources(enclosureId, since, at, db) : []
   const carried = await readCarriedAgents(db, sources, at, exceptOrderId)
   const given = agent && (await readGivenInLast24h(db, sources, agent, at))
+  const untold = await readDosesOfGoneVersions(db, sources, at)
   const isListed = (row: CarriedAgentRow) =>
     ordered.some((one) => one.number === row.number && one.agent === row.agent)
   const uses = [
@@ -53,9 +55,9 @@ export async function readAgentHistory(
     ...carried.filter((row) => !isListed(row)).map((row) => carriedUse(row, sources, at)),
   ]
   return {
-    agentUses: known(uses, at.toISOString(), 'the orders'),
+    agentUses: untold.length > 0 ? unknown() : known(uses, at.toISOString(), 'the orders'),
     givenInLast24hMgPerL:
-      given && !given.unclear
+      given && !given.unclear && !untold.some((givenAt) => givenAt > dayBefore)
         ? known(given.totalMgPerL, at.toISOString(), 'the doses recorded here')
         : unknown(),
   }
