@@ -4,6 +4,7 @@ import {
   firstPlausibleYear,
   firstYearOfOrigin,
   isInPlausibleYear,
+  isPlausibleInstant,
   lastPlausibleYear,
 } from '../domain/time/plausible-time.ts'
 import { roles } from '../domain/permissions/roles.ts'
@@ -22,7 +23,7 @@ export const Instant = z.iso
     abort: true,
     error: 'Give a day and a time with its offset, for example 2026-12-01T14:20:00-05:00',
   })
-  .refine((text) => isInPlausibleYear(text), outsideYears(firstPlausibleYear))
+  .refine(isPlausibleInstant, outsideYears(firstPlausibleYear))
   .describe('An instant, ISO 8601 with offset')
 /** A calendar date at the facility. */
 export const LocalDate = z.iso

@@ -13,3 +13,16 @@ export function isInPlausibleYear(text: string, firstYear = firstPlausibleYear):
   const year = /^(\d{4})(?!\d)/.exec(text)?.[1]
   return year !== undefined && Number(year) >= firstYear && Number(year) <= lastPlausibleYear
 }
+
+const widestOffsetMs = 14 * 3_600_000
+
+/** Whether an instant lies in such a year wherever it is read: what it is on the facility's calendar is a date too. */
+export function isPlausibleInstant(text: string): boolean {
+  const ms = Date.parse(text)
+  const yearAt = (at: number) => new Date(at).getUTCFullYear()
+  return (
+    isInPlausibleYear(text) &&
+    yearAt(ms - widestOffsetMs) >= firstPlausibleYear &&
+    yearAt(ms + widestOffsetMs) <= lastPlausibleYear
+  )
+}
