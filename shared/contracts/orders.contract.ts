@@ -88,6 +88,7 @@ const CalendarDose = z.object({
     .nullable()
     .describe('What was recorded of it last; null: nothing yet'),
   recordedAt: Instant.nullable().describe('When that happened'),
+  stoppedAt: Instant.nullable().describe('When its bath was stopped before its time'),
   record: z.enum(['intact', 'broken']).describe('Whether it is what was recorded'),
 })
 

@@ -310,7 +310,8 @@ export const cautionTexts = defineMessages({
     `Doses are ${hours(p.intervalHours)} apart, and each bath lasts ${minutes(p.contactMinutes)}. The animals would be in two doses at once.`,
   'dose-late': (p) =>
     `${hours(p.hours)} after the last dose. The window closed after ${hours(p.latestHours)}.`,
-  'doses-past-plan': (p) => `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} are given.`,
+  'doses-past-plan': (p) =>
+    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} ${p.given === 1 ? 'is' : 'are'} given.`,
   'same-agent-together': (p) =>
     `Order ${p.orderNumber} gives the same drug into this connected water at the same time. Together the animals get both doses.`,
   'agents-not-together': (p) =>

@@ -120,6 +120,7 @@ export const orderViewWords = defineMessages({
   comingState: 'to come',
   pastState: 'not recorded, past its time',
   recordedAt: (p: { what: string; at: string }) => `${p.what}, ${p.at}`,
+  stoppedAt: (p: { at: string }) => `stopped before its time, ${p.at}`,
   sheet: 'Bath sheet',
   sheetOf: (p: { key: string }) => `Bath sheet of dose ${p.key}`,
   noDoses: 'The signed text plans no doses.',

@@ -50,7 +50,8 @@ const titles = defineMessages({
       t.drug,
     ),
   'case-ready': (t: Told) => `Decide, ${caseWords(t)}`,
-  'dose-exceptions': (t: Told) => `Review the dose, ${beside(t.text('enclosure'), t.drug)}`,
+  'dose-exceptions': (t: Told) =>
+    `${t.has('stopped') ? 'The bath was stopped' : 'Review the dose'}, ${beside(t.text('enclosure'), t.drug)}`,
   'discrepancy-veterinarian': (t: Told) => `Explain, ${t.text('accession')} ${t.text('animal')}`,
   'bodies-veterinarian': sayBodies,
   'bath-running': (t: Told) => `${t.drug} bath, ${t.text('enclosure')}`,
@@ -108,7 +109,12 @@ const notes = defineMessages({
   'order-draft': (t: Told) => beside(t.text('problem'), byAndWhen(t)),
   'case-ready': (t: Told) => beside(dayOf(t), 'nothing stands against clearance'),
   'dose-exceptions': (t: Told) =>
-    beside(t.text('number'), 'recorded though a rule stood against it', byAndWhen(t)),
+    beside(
+      t.text('number'),
+      !t.has('stopped') && 'recorded though a rule stood against it',
+      t.has('seen') && `“${t.text('seen')}”`,
+      byAndWhen(t),
+    ),
   'discrepancy-veterinarian': sayDoesNotFit,
   'bodies-veterinarian': byAndWhen,
   'bath-running': (t: Told) => beside(t.text('number'), `begun ${t.at}`, t.text('by')),

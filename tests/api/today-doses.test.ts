@@ -239,6 +239,42 @@ describe('doses on the worklist', () => {
     expect(await worklist.itemsOf('veterinarian', 'dose-exceptions', number)).toEqual([])
   })
 
+  it('stopped before the time was over are shown to the veterinarian, with what was seen', async () => {
+    api.clock.set(new Date('2026-12-01T18:20:00Z'))
+    const number = await aSigned({ startsAt: '2026-12-01T18:20:00Z' })
+    const keeper = await api.as('keeper')
+    const doseId = api.nextId()
+    await keeper.agent
+      .post(`/api/orders/${number}/doses/1/record`)
+      .send({
+        id: doseId,
+        kind: 'recorded',
+        happenedAt: '2026-12-01T18:10:00Z',
+        amount: { value: '218', unit: 'mL' },
+        lotId: formalin.lotId,
+      })
+      .expect(201)
+    await keeper.agent
+      .post(`/api/doses/${doseId}/stop`)
+      .send({
+        id: api.nextId(),
+        cause: 'stopped',
+        happenedAt: '2026-12-01T18:15:00Z',
+        seen: 'two on their side',
+      })
+      .expect(201)
+    const items = await worklist.itemsOf('veterinarian', 'dose-exceptions', number)
+    expect(items).toContainEqual(
+      expect.objectContaining({
+        at: '2026-12-01T18:15:00.000Z',
+        params: expect.objectContaining({ seen: 'two on their side', by: 'Test keeper', stopped: 1 }),
+      }),
+    )
+    const { agent } = await api.as('veterinarian')
+    const { calendar } = (await agent.get(`/api/orders/${number}`).expect(200)).body
+    expect(calendar[0]).toMatchObject({ recorded: 'recorded', stoppedAt: '2026-12-01T18:15:00.000Z' })
+  })
+
   it('drafts and proposals wait for a veterinarian', async () => {
     const draft = await aDraft(api, fields())
     const proposal = await aDraft(api, fields(), await api.as('technician'))

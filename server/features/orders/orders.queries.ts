@@ -168,6 +168,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
             closesAt,
             recorded: last?.kind ?? null,
             recordedAt: last?.happened_at.toISOString() ?? null,
+            stoppedAt: last?.stopped_at?.toISOString() ?? null,
             record: last?.is_as_written === false ? ('broken' as const) : ('intact' as const),
           }
         }),

@@ -194,6 +194,8 @@ export interface RecordedDoseRow {
   is_as_written: boolean
   by_name: string | null
   ended_at: Date | null
+  /** When somebody stopped its bath before the time was over. */
+  stopped_at: Date | null
   /** Who calculated it a second time after themselves, and how many minutes later; null where another person did. */
   alone_by: string | null
   alone_after_minutes: number | null
@@ -206,6 +208,7 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
             row_is_as_written('doses', d.id::text) AS is_as_written,
             p.printed_name AS by_name,
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
+            (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped') AS stopped_at,
             a.by_name AS alone_by, a.minutes AS alone_after_minutes
        FROM live_doses d
        JOIN orders_of_doses w ON w.dose_id = d.id

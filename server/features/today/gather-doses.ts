@@ -141,5 +141,24 @@ function recordedItems(row: RecentDoseRow, moment: Moment, mayStop: boolean): To
         params: doseParams(row),
       }),
     )
+  // stopped before its time: somebody saw a reason, whatever became of the animals
+  if (
+    row.stop_cause === 'stopped' &&
+    row.stop_at &&
+    row.stop_at >= new Date(addHours(moment.at, -exceptionsShownHours))
+  )
+    items.push(
+      waiting({
+        id: `bath-stopped:${row.id}`,
+        kind: 'dose-exceptions',
+        at: row.stop_at.toISOString(),
+        params: {
+          ...doseParams(row),
+          by: row.stop_by ?? '',
+          stopped: 1,
+          ...(row.stop_seen ? { seen: row.stop_seen } : {}),
+        },
+      }),
+    )
   return items
 }

@@ -17,7 +17,10 @@ export function doseStanding(
 ): { mark: StepState; words: 'due' | 'coming' | 'past' | NonNullable<CalendarDose['recorded']> } {
   if (dose.recorded !== null)
     return {
-      mark: dose.recorded === 'given' || dose.recorded === 'recorded' ? 'done' : 'failed',
+      mark:
+        dose.stoppedAt === null && (dose.recorded === 'given' || dose.recorded === 'recorded')
+          ? 'done'
+          : 'failed',
       words: dose.recorded,
     }
   const at = Date.parse(now)
@@ -65,6 +68,7 @@ export function DoseCalendar({
                 <b>{words.dose({ key: dose.key })}</b> <span className="num">{say(dose.dueAt)}</span>
                 {', '}
                 {dose.recordedAt === null ? what : words.recordedAt({ what, at: say(dose.recordedAt) })}
+                {dose.stoppedAt === null ? null : <b>, {words.stoppedAt({ at: say(dose.stoppedAt) })}</b>}
                 {dose.record === 'broken' ? <b> {doseWords.notAsRecorded}</b> : null}
                 <small>{words.window({ from: say(dose.opensAt), until: say(dose.closesAt) })}</small>
               </span>

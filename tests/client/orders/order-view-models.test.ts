@@ -11,6 +11,7 @@ const dose: Order['calendar'][number] = {
   closesAt: '2026-12-02T00:00:00.000Z',
   recorded: null,
   recordedAt: null,
+  stoppedAt: null,
   record: 'intact',
 }
 
