@@ -62,6 +62,8 @@ const titles = defineMessages({
   sample: (t: Told) => beside(t.text('step'), t.text('enclosure')),
   'volume-to-confirm': (t: Told) => `Confirm the volume, ${t.text('enclosure')}`,
   'volume-check': (t: Told) => `Determine the volume again, ${t.text('enclosure')}`,
+  'outside-case': (t: Told) =>
+    `In no case: ${t.text('animal')} ${t.text('accession')}, ${t.text('enclosure')}`,
   'case-to-close': (t: Told) => `Is the batch complete? ${caseWords(t)}`,
   observation: (t: Told) =>
     beside(t.has('step') ? t.text('step') : 'Daily look', `${t.text('enclosure')} ${t.text('name')}`),
@@ -135,6 +137,8 @@ const notes = defineMessages({
   'volume-to-confirm': (t: Told) =>
     beside(t.text('waters'), `determined by ${t.text('by')}`, t.at, 'needs another person'),
   'volume-check': (t: Told) => t.text('waters'),
+  'outside-case': (t: Told) =>
+    beside(`inside the quarantine boundary since ${t.at}`, 'open a case, or take it into the one that runs'),
   'case-to-close': () => 'The clock begins when the last of the batch is in.',
   observation: (t: Told) => beside(t.text('case'), dayOf(t), lastLook(t)),
   care: sayStep,

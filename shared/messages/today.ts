@@ -101,6 +101,7 @@ export const goWords = defineMessages({
   sample: 'Record it',
   'volume-to-confirm': 'Read and confirm',
   'volume-check': '',
+  'outside-case': '',
   'case-to-close': '',
   observation: 'Observe',
   care: 'Record it',

@@ -74,6 +74,28 @@ describe('quarantine locks', () => {
     expect((await move('keeper', ray.url, wing1, hall)).status).toBe(201)
   })
 
+  it('hold who came into the water of a case and belongs to none, also when that case is over, through every tank of the wing', async () => {
+    const ward = await aPlace(api, { boundary: 'Quarantine wing' })
+    const quarantined = await anAnimal(api, { taxonId, enclosureId: ward.id })
+    const id = await lock(quarantined.id, 'boundary')
+    const happenedAt = '2026-11-20T14:00:00Z'
+    const newcomer = await anAnimal(api, { taxonId, enclosureId: ward.id, happenedAt })
+    await inTx((tx) =>
+      api.composition.animals.service.liftMovement(tx, {
+        sourceId: id,
+        reason: 'cleared',
+        at: nextTime(),
+      }),
+    )
+    expect((await move('keeper', quarantined.url, ward, hall)).status).toBe(201)
+    expect((await move('keeper', newcomer.url, ward, wing2)).status).toBe(201)
+    const reply = await move('keeper', newcomer.url, wing2, hall)
+    expect([reply.status, reply.body.code]).toEqual([403, 'documented-transfer-needed'])
+    expect(reply.body.detail).toContain('Q-014')
+    const documented = { documentedTransfer: 'seen healthy, to the hall', reason: 'no case was opened' }
+    expect((await move('veterinarian', newcomer.url, wing2, hall, documented)).status).toBe(201)
+  })
+
   it('stop every move under a full lock, and say who lifts it', async () => {
     // Of its own, since a full lock on an animal holds the water that it stands in
     const ward = await aPlace(api, { boundary: 'Quarantine wing' })

@@ -57,6 +57,19 @@ const preview = async (fields: object) => {
 }
 
 describe('what may be signed: an order', () => {
+  it('is signed by nobody whose licence was made longer in the database', async () => {
+    const lengthen = (days: number) =>
+      owner
+        .query(`SET session_replication_role = replica`)
+        .then(() => owner.query(`UPDATE licences SET valid_until = valid_until + $1::int`, [days]))
+    const draft = await aDraft(api, praziFields({}))
+    await lengthen(365)
+    expect((await signDraft(api, draft)).body.code).toBe('licence-not-valid')
+    await lengthen(-365)
+    await owner.query(`SET session_replication_role = DEFAULT`)
+    expect((await signDraft(api, draft)).status).not.toBe(403)
+  })
+
   it('with a figure far beyond every dose line of the drug is signed by nobody, whether it names one or not', async () => {
     const { lines } = (await (await api.as('veterinarian')).agent.get('/api/formulary').expect(200)).body
     const short = lines.find((line: { use: string }) => line.use === 'flukes-short')

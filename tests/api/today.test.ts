@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { aCase } from '../builders/a-case.ts'
+import { aCase, aFish, simpleProtocolId } from '../builders/a-case.ts'
 import { aGroup, aPlace, aTaxon } from '../builders/a-collection.ts'
 import { anObservation } from '../builders/an-observation.ts'
 import { anEnclosure, aTankAndSumpSheet } from '../builders/a-water.ts'
@@ -105,6 +105,25 @@ describe('quarantine on the worklist', () => {
       .send({ id: api.nextId(), happenedAt: '2026-12-01T18:00:00Z', origin: 'online', device: 'test' })
       .expect(201)
     expect(await worklist.rolesThatSee('case-held', one.number)).toEqual(['veterinarian'])
+  })
+
+  it('names who came into quarantine and belongs to no case, until a case takes them', async () => {
+    const enclosure = await anEnclosure(api, 'W-OUT', { boundary: 'Wing' })
+    const given = { taxonId: await aFish(api), enclosureId: enclosure.id, count: 3 }
+    const outside = await aGroup(api, { ...given, happenedAt: '2026-11-30T14:00:00Z' })
+    const { accession } = outside
+    expect(await worklist.rolesThatSee('outside-case', accession)).toEqual(['veterinarian', 'technician'])
+    const { agent } = await api.as('technician')
+    await agent
+      .post('/api/cases')
+      .send({
+        id: api.nextId(),
+        protocolVersionId: simpleProtocolId,
+        members: [{ id: api.nextId(), accession, happenedAt: '2026-11-30T14:00:00Z' }],
+        happenedAt: '2026-11-30T14:00:00Z',
+      })
+      .expect(201)
+    expect(await worklist.itemsOf('technician', 'outside-case', accession)).toEqual([])
   })
 
   it('shows an urgent call to everybody who may answer it until somebody has seen it', async () => {

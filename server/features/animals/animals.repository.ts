@@ -117,6 +117,34 @@ export async function wasClearedHere(tx: Tx, animalId: string, at: Date): Promis
   return rows.length > 0
 }
 
+/**
+ * Where an animal has been without a break inside the quarantine boundary that it stands in, from when each time; none
+ * when it stands in none, or was cleared since it came.
+ */
+export async function findArrivalsInBoundary(
+  tx: Tx,
+  animalId: string,
+  at: Date,
+): Promise<{ enclosure_id: string; since: Date }[]> {
+  return tx.manager.query(
+    `WITH RECURSIVE run AS (
+       SELECT s.animal_id, s.enclosure_id, lower(s.during) AS since, e.boundary
+         FROM stays s JOIN enclosures e ON e.id = s.enclosure_id
+        WHERE s.animal_id = $1 AND s.during @> $2::timestamptz AND e.boundary IS NOT NULL
+       UNION ALL
+       SELECT s.animal_id, s.enclosure_id, lower(s.during), e.boundary
+         FROM run r
+         JOIN stays s ON s.animal_id = r.animal_id AND upper(s.during) = r.since
+         JOIN enclosures e ON e.id = s.enclosure_id AND e.boundary = r.boundary)
+     SELECT run.enclosure_id, run.since FROM run
+      WHERE NOT EXISTS (
+        SELECT 1 FROM movement_locks k JOIN movement_lock_lifts f ON f.lock_id = k.id
+         WHERE k.animal_id = $1 AND k.kind = 'boundary' AND f.happened_at <= $2
+           AND f.happened_at >= (SELECT min(first.since) FROM run first))`,
+    [animalId, at],
+  )
+}
+
 export interface EnclosureRow {
   id: string
   code: string

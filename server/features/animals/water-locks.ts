@@ -47,21 +47,35 @@ export function createWaterLocks(parts: { water: WaterQuestions }) {
     return animals.findOthersIn(tx, sharing, given)
   }
 
+  /**
+   * Came into the water of a case and never belonged to one: the end of that case says nothing of it. Boundary locks
+   * of those that it met, as they stood when it came.
+   */
+  async function metOnArrival(tx: Tx, animalId: string, at: Date): Promise<LockReadRow[]> {
+    const found: LockReadRow[] = []
+    for (const { enclosure_id, since } of await animals.findArrivalsInBoundary(tx, animalId, at)) {
+      const others = await othersIn(tx, enclosure_id, { at: since, but: animalId })
+      found.push(...(await readLocks(tx.manager, others, since)).filter(({ kind }) => kind === 'boundary'))
+    }
+    return found
+  }
+
   return {
     async bearingOn(tx: Tx, { animalId, fromId, toId, at }: MovePlaces): Promise<BearingLocks> {
       const left = await othersIn(tx, fromId, { at, but: animalId })
-      const met = await othersIn(tx, toId, { at, but: animalId })
+      const there = await othersIn(tx, toId, { at, but: animalId })
       const self = animalId === null ? [] : [animalId]
-      const then = await readLocks(tx.manager, [...self, ...left, ...met], at)
+      const then = await readLocks(tx.manager, [...self, ...left, ...there], at)
       const on = (ids: readonly string[]) => then.filter((lock) => ids.includes(lock.animal_id))
       // Its own clearance let it out of this water; a hold on the water stands all the same
       const cleared = animalId !== null && (await animals.wasClearedHere(tx, animalId, at))
       const known = new Set(then.map(({ id }) => id))
-      const now = at < tx.at ? await readLocks(tx.manager, [...self, ...left, ...met], tx.at) : []
+      const now = at < tx.at ? await readLocks(tx.manager, [...self, ...left, ...there], tx.at) : []
+      const met = cleared || animalId === null ? [] : await metOnArrival(tx, animalId, at)
       return {
         own: on(self),
-        leaves: on(left).filter(({ kind }) => kind === 'all' || !cleared),
-        enters: on(met),
+        leaves: [...on(left).filter(({ kind }) => kind === 'all' || !cleared), ...met],
+        enters: on(there),
         later: now.filter((lock) => lock.kind === 'all' && !known.has(lock.id)),
       }
     },

@@ -1,4 +1,5 @@
 import type { Db } from '../../platform/database/db.ts'
+import { readChangedTables } from '../../platform/audit/changed-rows.ts'
 import type { SignedIn } from '../../platform/http/guard.ts'
 import type { FacilityService } from '../facility/index.ts'
 import { presentLicence } from './people.present.ts'
@@ -28,14 +29,19 @@ export function createPeopleQuestions(parts: { dataSource: Db; now(): Date; faci
         mustChangePassword: row.must_change_password,
       }
     },
-    /** A licence of this person valid on the facility day of `at` for an accepted jurisdiction, the longest one; or null. */
+    /**
+     * A licence of this person valid on the facility day of `at` for an accepted jurisdiction, the longest one; or null.
+     * One that another hand changed is none to sign by.
+     */
     async validLicence(personId: string, at: Date, db: Db = parts.dataSource) {
       const row = await readPerson(db, personId)
       const today = {
         on: await parts.facility.dateOf(at),
         accepted: await parts.facility.acceptedJurisdictions(),
       }
-      const valid = (row?.licences ?? []).find((licence) => presentLicence(licence, today).state === 'valid')
+      const held = row?.licences ?? []
+      const valid = held.find((licence) => presentLicence(licence, today).state === 'valid')
+      if (valid && (await readChangedTables(db, [['licences', valid.id]])).length > 0) return null
       const found: ValidLicence | null = valid
         ? { jurisdiction: valid.jurisdiction, number: valid.number, validUntil: valid.valid_until }
         : null

@@ -11,6 +11,7 @@ import type { Water } from '../water/index.ts'
 import { CaseEventRow, CaseMemberRow, CaseRow, CaseStepRecordRow } from './case.entity.ts'
 import { createCaseEventsService } from './case-events.service.ts'
 import { createCaseWriter } from './case-writer.ts'
+import { readOutsideCases } from './outside-cases.reads.ts'
 import { readLastLooksOfCases } from './last-looks.reads.ts'
 import { createClearanceService } from './clearance.service.ts'
 import { clearanceRoutes } from './clearance.routes.ts'
@@ -38,6 +39,7 @@ import { createTreatmentsService } from './treatments.service.ts'
 import { createUnnamedBodies } from './unnamed-bodies.ts'
 
 export { verifySignedEvents } from './verify-signed-events.ts'
+export type { OutsideCaseRow } from './outside-cases.reads.ts'
 export type { TreatmentsService } from './treatments.service.ts'
 export type { CaseEventFacts } from './case-event-facts.ts'
 
@@ -100,6 +102,7 @@ export function createQuarantine(
     observationQueries,
     /** When each case was last looked at in each of its enclosures. */
     lastLooks: (since: Date) => readLastLooksOfCases(parts.dataSource, since),
+    outsideCases: () => readOutsideCases(parts.dataSource),
     routes: [
       ...quarantineRoutes({ cases, events, protocols, queries, clock: parts.clock }),
       ...clearanceRoutes({ clearance, queries, print, clock: parts.clock }),

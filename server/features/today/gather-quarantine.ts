@@ -3,6 +3,7 @@ import type { listCases } from '../../../shared/contracts/quarantine.contract.ts
 import type { CaseRow, CaseStepView } from '../../../shared/contracts/quarantine-primitives.ts'
 import type { TodayWork } from '../../../shared/contracts/today.contract.ts'
 import { addDays, facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
+import type { OutsideCaseRow } from '../quarantine/index.ts'
 import { onDays, waiting, work } from './work.ts'
 import type { Moment } from './work.ts'
 
@@ -28,6 +29,17 @@ export function gatherQuarantine(board: Board, looks: readonly LastLook[], momen
       : [...decisions(row), ...stepItems(row, moment), ...observationItems(row, looks, moment)]
   })
 }
+
+/** Who came into quarantine and belongs to no case: nobody counts their days, and nothing holds them there. */
+export const gatherOutsideCases = (rows: readonly OutsideCaseRow[]): TodayWork[] =>
+  rows.map((row) =>
+    waiting({
+      id: `outside-case:${row.accession}`,
+      kind: 'outside-case',
+      at: row.since.toISOString(),
+      params: { accession: row.accession, animal: row.name, enclosure: row.enclosure_code },
+    }),
+  )
 
 const paramsOf = (row: CaseRow) => ({
   case: row.number,

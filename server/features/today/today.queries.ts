@@ -13,7 +13,7 @@ import type { GatheredDoses } from './gather-doses.ts'
 import { gatherBodies, gatherFlagged, gatherNotices } from './gather-observations.ts'
 import { gatherOrders } from './gather-orders.ts'
 import { gatherOwnLicence, gatherPeople } from './gather-people.ts'
-import { gatherQuarantine } from './gather-quarantine.ts'
+import { gatherOutsideCases, gatherQuarantine } from './gather-quarantine.ts'
 import { gatherRegister } from './gather-register.ts'
 import { gatherWater } from './gather-water.ts'
 import { todayLog } from './today-log.ts'
@@ -40,11 +40,12 @@ export function createTodayQueries(parts: TodayParts) {
   }
 
   async function gatherCases(moment: Moment): Promise<TodayWork[]> {
-    const [board, looks] = await Promise.all([
+    const [board, looks, outside] = await Promise.all([
       quarantine.queries.board({ view: 'running', limit: mostCases }),
       quarantine.lastLooks(new Date(moment.now.getTime() - looksSinceDays * msPerDay)),
+      quarantine.outsideCases(),
     ])
-    return gatherQuarantine(
+    const inCases = gatherQuarantine(
       board,
       looks.map((row) => ({
         number: row.number,
@@ -54,6 +55,7 @@ export function createTodayQueries(parts: TodayParts) {
       })),
       moment,
     )
+    return [...inCases, ...gatherOutsideCases(outside)]
   }
 
   return {

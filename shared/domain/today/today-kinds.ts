@@ -38,6 +38,7 @@ export const todayKinds = {
   sample: { lane: 'doses', action: 'sample.take' },
   'volume-to-confirm': { lane: 'doses', action: 'volume.confirm' },
   'volume-check': { lane: 'doses', action: 'volume.confirm' },
+  'outside-case': { lane: 'doses', action: 'case.open' },
   'case-to-close': { lane: 'doses', action: 'case.open' },
   observation: { lane: 'watch', action: 'observation.record' },
   care: { lane: 'watch', action: 'observation.record' },

@@ -33,6 +33,7 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   sample: toCase,
   'volume-to-confirm': toVolumes,
   'volume-check': (told) => paths.enclosureVolume(told('enclosure')),
+  'outside-case': (told) => paths.enclosure(told('enclosure')),
   'case-to-close': toCase,
   observation: (told) => paths.observe(told('enclosure')),
   care: toCase,

@@ -28,6 +28,7 @@ const inQuarantine = new Set<TodayWork['kind']>([
   'sample',
   'care',
   'case-to-close',
+  'outside-case',
 ])
 
 /** One piece of work: its mark, what and where as the link to it, what helps, and what can be done here. */
