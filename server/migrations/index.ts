@@ -24,6 +24,7 @@ import { AmountsLearnt1764600000038 } from './0038-amounts-learnt.ts'
 import { SignInsOfAnAddress1764600000039 } from './0039-sign-ins-of-an-address.ts'
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
 import { DosesOfGoneOrders1764600000041 } from './0041-doses-of-gone-orders.ts'
+import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -54,4 +55,5 @@ export const migrations = [
   SignInsOfAnAddress1764600000039,
   RowMarkLookup1764600000040,
   DosesOfGoneOrders1764600000041,
+  ContactsOfDoses1764600000044,
 ]

@@ -89,7 +89,9 @@ export const RunningBath = z.object({
   doseId: RecordId,
   key: DoseKey,
   startedAt: Instant,
-  endsAt: Instant.describe('By the contact time of the version that it was given under'),
+  endsAt: Instant.nullable().describe(
+    'By the contact time that was signed of the version it was given under; null where the signed text cannot be read',
+  ),
   by: z.string().describe('Who recorded it'),
 })
 export type RunningBath = z.infer<typeof RunningBath>

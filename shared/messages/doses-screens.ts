@@ -204,6 +204,7 @@ export const timerWords = defineMessages({
   in: (p: { at: string; by: string }) => `Drug in at ${p.at}, ${p.by}`,
   outBy: (p: { at: string }) => `Out by ${p.at}`,
   outNow: (p: { at: string }) => `Was to end at ${p.at}`,
+  endUntold: 'The time to stop cannot be read: ask the veterinarian',
   reading: 'Enter a reading',
   end: 'The bath has ended',
   stop: 'Stop the bath',

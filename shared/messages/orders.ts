@@ -3,6 +3,7 @@ import { counted, defineMessages } from './define-messages.ts'
 /** Words of treatment orders, on screen and on paper. */
 export const orderWords = defineMessages({
   drugGone: 'not known any more',
+  drugUnknown: 'Unknown drug',
   stopIfUnreadable:
     'What the order said about stopping cannot be relied on any more. Stop at any sign of distress.',
   order: 'Treatment order: bath',

@@ -119,7 +119,13 @@ const notes = defineMessages({
     ),
   'discrepancy-veterinarian': sayDoesNotFit,
   'bodies-veterinarian': byAndWhen,
-  'bath-running': (t: Told) => beside(t.text('number'), `begun ${t.at}`, t.text('by')),
+  'bath-running': (t: Told) =>
+    beside(
+      t.text('number'),
+      `begun ${t.at}`,
+      t.text('by'),
+      t.has('endUntold') && 'the time to stop cannot be read: ask the veterinarian',
+    ),
   'second-calculation': (t: Told) =>
     beside(t.text('number'), `dose ${t.text('key')}`, `first by ${t.text('by')}, ${t.at}`),
   dose: (t: Told) =>

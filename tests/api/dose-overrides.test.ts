@@ -66,6 +66,89 @@ async function override(number: string, given: object = {}, by: TestPerson = vet
     .send({ password, ruleId, code, finding, lotId: sheet.lotId, reason, ...given })
 }
 
+describe('a bath that runs under an order whose versions were taken away', () => {
+  /** As the owner, past the constraints that join the tables. */
+  async function byHand(sql: string, number: string): Promise<void> {
+    await owner.query('BEGIN')
+    await owner.query(`SET LOCAL session_replication_role = replica`)
+    await owner.query(
+      `${sql} WHERE ${sql.includes('order_versions') ? 'order_id' : 'subject_id'} = (SELECT id FROM orders WHERE number = $1)`,
+      [number],
+    )
+    await owner.query('COMMIT')
+  }
+  const takeVersions = (number: string) => byHand('DELETE FROM order_versions', number)
+
+  /** What the sheet, the doses that are due and the worklist say of a bath that runs. */
+  async function running(number: string) {
+    const { agent } = house.technician
+    const sheet = (await agent.get(house.doseAt(number)).expect(200)).body
+    const due = (await agent.get('/api/due-doses').expect(200)).body.rows
+    const { items } = (await agent.get('/api/today').expect(200)).body
+    return {
+      sheet: [sheet.state, sheet.running.map((bath: { endsAt: string | null }) => bath.endsAt)],
+      due: due
+        .filter((row: { number: string }) => row.number === number)
+        .map((row: { state: string }) => row.state),
+      today: items
+        .filter(
+          (one: { kind: string; params: { number: string } }) =>
+            one.kind === 'bath-running' && one.params.number === number,
+        )
+        .map((one: { dueAt: string | null }) => one.dueAt),
+    }
+  }
+  const end = '2026-12-01T19:05:00.000Z'
+  const untold = { sheet: ['running', [null]], due: ['running'], today: [null] }
+
+  it('runs on until somebody ends it, and is in the list as broken, not as a draft', async () => {
+    const number = await house.signedBath(await house.tankWithSchool())
+    const id = api.nextId()
+    await house.record(number, { id }).expect(201)
+    expect(await running(number)).toEqual({ sheet: ['running', [end]], due: ['running'], today: [end] })
+    await takeVersions(number)
+    expect(await running(number)).toEqual(untold)
+    const { agent } = house.technician
+    const listed = async () => (await agent.get(`/api/orders?q=${number}`).expect(200)).body.rows
+    expect(await listed()).toMatchObject([{ record: 'broken', phase: 'in-progress', dosesGiven: 1 }])
+    await agent
+      .post(`/api/doses/${id}/stop`)
+      .send({ id: api.nextId(), cause: 'stopped', happenedAt: '2026-12-01T18:20:00Z' })
+      .expect(201)
+    expect(await running(number)).toEqual({ sheet: ['done', []], due: [], today: [] })
+  })
+
+  it('ends by the time that was signed, whatever a column says; where the text cannot be read, by none', async () => {
+    const number = await house.signedBath(await house.tankWithSchool())
+    await house.record(number).expect(201)
+    await byHand('UPDATE order_versions SET contact_minutes = 4500', number)
+    expect(await running(number)).toEqual({ sheet: ['running', [end]], due: ['running'], today: [end] })
+    await byHand(
+      `UPDATE signed_texts SET text = replace(text, '"contactMinutes":45', '"contactMinutes":450')`,
+      number,
+    )
+    expect(await running(number)).toEqual(untold)
+    await byHand(`UPDATE signed_texts SET text = 'nothing'`, number)
+    expect(await running(number)).toEqual(untold)
+  })
+
+  it('leaves what is in that water unknown, which stops the next order for it', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    await house.record(number).expect(201)
+    const second = await aDraft(api, house.fieldsOf(bath))
+    const codes = async () => {
+      const { draft } = (await vet.agent.get(`/api/orders/${second.number}`).expect(200)).body
+      const { cautions } = (await vet.agent.post('/api/order-previews').send(draft).expect(200)).body
+      return cautions.map((one: { code: string; level: string }) => `${one.level} ${one.code}`)
+    }
+    expect(await codes()).toContain('stop same-agent-together')
+    await takeVersions(number)
+    expect(await codes()).toContain('stop agent-history-unknown')
+    expect((await signDraft(api, second)).status).toBe(409)
+  })
+})
+
 describe('a stop found at the dose', () => {
   it('is overridden by a signed reason for this dose, which then goes on and shows it', async () => {
     const { number } = await aReadyBathWithoutOxygen()
@@ -174,34 +257,5 @@ describe('a stop found at the dose', () => {
     const refused = await override(other.number, { ruleId: 'R47', code: beyond.code, finding: 'any' })
     expect([refused.status, refused.body.code]).toEqual([409, 'caution-stops'])
     expect(refused.body.detail).toContain('Nobody may override')
-  })
-})
-
-describe('a bath that runs under an order whose versions were taken away', () => {
-  /** As the owner, past the constraints that join the tables. */
-  async function takeVersions(number: string): Promise<void> {
-    await owner.query('BEGIN')
-    await owner.query(`SET LOCAL session_replication_role = replica`)
-    await owner.query(
-      `DELETE FROM order_versions WHERE order_id = (SELECT id FROM orders WHERE number = $1)`,
-      [number],
-    )
-    await owner.query('COMMIT')
-  }
-
-  it('leaves what is in that water unknown, which stops the next order for it', async () => {
-    const bath = await house.tankWithSchool()
-    const number = await house.signedBath(bath)
-    await house.record(number).expect(201)
-    const second = await aDraft(api, house.fieldsOf(bath))
-    const codes = async () => {
-      const { draft } = (await vet.agent.get(`/api/orders/${second.number}`).expect(200)).body
-      const { cautions } = (await vet.agent.post('/api/order-previews').send(draft).expect(200)).body
-      return cautions.map((one: { code: string; level: string }) => `${one.level} ${one.code}`)
-    }
-    expect(await codes()).toContain('stop same-agent-together')
-    await takeVersions(number)
-    expect(await codes()).toContain('stop agent-history-unknown')
-    expect((await signDraft(api, second)).status).toBe(409)
   })
 })

@@ -24,8 +24,10 @@ export interface DoseReadRow {
   amount_entered_unit: string | null
   lot_number: string | null
   note: string | null
-  /** Contact time of the version it was given under; null where the agent stays in the water. */
+  /** Contact time of the version it was given under, as signed; null where the agent stays in the water or nobody can tell. */
   contact_minutes: number | null
+  /** False where the signed text cannot be read: nobody can tell how long it was to be in. */
+  contact_is_told: boolean
   exceptions_text: string
   /** False where somebody changed it in the database: none of its figures is shown. */
   is_as_written: boolean
@@ -75,7 +77,7 @@ export function readDoses(db: Db, orderId: string): Promise<DoseReadRow[]> {
 /** The same of several orders at once; each row says whose it is. */
 export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseReadRow[]> {
   return db.query(
-    `SELECT d.id, w.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, v.contact_minutes,
+    `SELECT d.id, w.order_id, d.dose_key, d.kind, d.amount_entered_value, d.amount_entered_unit, t.lot_number, d.note, c.contact_minutes, c.is_told AS contact_is_told,
             d.exceptions_text, row_is_as_written('doses', d.id::text) AS is_as_written, d.happened_at, d.recorded_at, p.printed_name AS by_name,
             s.happened_at AS stop_at, q.printed_name AS stop_by, s.cause AS stop_cause, s.seen AS stop_seen,
             s.rescue AS stop_rescue, s.id AS stop_id, d.recorded_by, s.recorded_at AS stop_recorded_at,
@@ -83,7 +85,7 @@ export function readDosesOf(db: Db, orderIds: readonly string[]): Promise<DoseRe
             y.printed_name AS struck_by
        FROM doses d
        JOIN orders_of_doses w ON w.dose_id = d.id
-       LEFT JOIN order_versions v ON v.id = d.order_version_id
+       JOIN contacts_of_doses c ON c.dose_id = d.id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN product_lots t ON t.id = d.lot_id
        LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true

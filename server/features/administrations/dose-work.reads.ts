@@ -6,13 +6,16 @@ export interface RecentDoseRow {
   number: string
   dose_key: string
   kind: 'given' | 'recorded' | 'withheld' | 'refused'
-  agent: string
+  /** Null where the signed version is gone. */
+  agent: string | null
   enclosure_code: string
   amount_entered_value: string | null
   amount_entered_unit: string | null
   /** False where somebody changed it in the database: none of its figures is shown. */
   is_as_written: boolean
   contact_minutes: number | null
+  /** False where the signed text cannot be read: nobody can tell how long it was to be in. */
+  contact_is_told: boolean
   has_exceptions: boolean
   happened_at: Date
   recorded_at: Date
@@ -27,18 +30,20 @@ export interface RecentDoseRow {
 export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
   return db.query(
     `SELECT d.id, o.number, d.dose_key, d.kind, v.agent, c.code AS enclosure_code, d.amount_entered_value,
-            d.amount_entered_unit, row_is_as_written('doses', d.id::text) AS is_as_written, v.contact_minutes, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
+            d.amount_entered_unit, row_is_as_written('doses', d.id::text) AS is_as_written, l.contact_minutes, l.is_told AS contact_is_told, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
             d.recorded_at, p.printed_name AS by_name, s.happened_at AS stop_at, s.cause AS stop_cause,
             s.seen AS stop_seen, q.printed_name AS stop_by
        FROM live_doses d
-       JOIN order_versions v ON v.id = d.order_version_id
-       JOIN orders o ON o.id = v.order_id
+       JOIN contacts_of_doses l ON l.dose_id = d.id
+       JOIN orders_of_doses w ON w.dose_id = d.id
+       JOIN orders o ON o.id = w.order_id
+       LEFT JOIN order_versions v ON v.id = d.order_version_id
        JOIN enclosures c ON c.id = o.enclosure_id
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
       WHERE d.happened_at >= $1 OR d.recorded_at >= $1
-         OR (v.contact_minutes IS NOT NULL AND d.kind IN ('given', 'recorded') AND s.id IS NULL)
+         OR (d.kind IN ('given', 'recorded') AND s.id IS NULL AND (l.contact_minutes IS NOT NULL OR NOT l.is_told))
       ORDER BY d.happened_at, d.id`,
     [since],
   )

@@ -1,8 +1,10 @@
 import type { QueryOf, ReplyOf } from '../../../shared/contracts/contract.ts'
 import type { listDueDoses } from '../../../shared/contracts/doses.contract.ts'
 import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
+import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
+import { orderWords } from '../../../shared/messages/orders.ts'
 import type { Db } from '../../platform/database/db.ts'
 import type { OpenOrder, OrderQueries } from '../orders/index.ts'
 import { readDosesOf, recordOf, stands } from './administrations.reads.ts'
@@ -11,6 +13,15 @@ import type { DoseReadRow } from './administrations.reads.ts'
 type DueDose = ReplyOf<typeof listDueDoses>['rows'][number]
 
 const aheadHours = 24
+
+/** The doses of an order whose plan is gone with its versions: those on record, each at its own time. */
+const plannedByRecords = (records: readonly DoseReadRow[]): PlannedDose[] =>
+  records
+    .filter((row, i) => records.findIndex(({ dose_key }) => dose_key === row.dose_key) === i)
+    .map(({ dose_key: key, happened_at }) => {
+      const at = happened_at.toISOString()
+      return { key, dueAt: at, opensAt: at, closesAt: at }
+    })
 
 /**
  * Doses that are due until an instant, late, or running now, in time order.
@@ -32,7 +43,7 @@ export async function findDueDoses(
   const found: DueDose[] = []
   for (const { row, plan, secondCalculation } of orders) {
     const records = byOrder.get(row.id) ?? []
-    const { planned } = plan
+    const planned = plan.planned.length > 0 ? plan.planned : plannedByRecords(records)
     const states = listDoseStates(planned, records.map(recordOf), { timed: plan.timed, ended: false }, now)
     for (const [i, dose] of planned.entries()) {
       const state = states[i]
@@ -44,7 +55,7 @@ export async function findDueDoses(
         dueAt: dose.dueAt,
         latestAt: dose.closesAt,
         enclosureCode: row.enclosureCode,
-        drug: row.agent ? agentNames[row.agent] : '',
+        drug: row.agent ? agentNames[row.agent] : orderWords.drugUnknown,
         // nobody is to know the amount beforehand who may be the second to work it out
         amountText: secondCalculation ? null : row.amountText,
         broken: row.record === 'broken',

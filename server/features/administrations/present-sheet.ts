@@ -275,7 +275,12 @@ export function presentSheet(request: SheetRequest): BathSheet {
   const isToCome = isOpen && situation.row.phase !== 'discontinued' && situation.row.phase !== 'expired'
   const hide = blind && (isToCome ? !secondStands(calculations) : request.mayBeSecondElsewhere)
   const hideLot = hide && isOpen && first !== undefined
-  const course = { timed: fields.timing === 'timed', ended: situation.row.phase === 'discontinued' }
+  // what nobody can tell the time of goes on until somebody ends it
+  const isUntold = records.some(({ contact_is_told: isTold }) => !isTold)
+  const course = {
+    timed: fields.timing === 'timed' || isUntold,
+    ended: situation.row.phase === 'discontinued',
+  }
   const calendar = presentCalendar(situation.plan, records, course, now)
   const why = obstacles(situation, calculations, { hide })
   return {
@@ -304,7 +309,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     })),
     lotId: hideLot ? null : (first?.lot_id ?? fields.lotId),
     targetText: `${content.targetText} ${content.basisText}`.trim(),
-    contactMinutes: course.timed ? fields.contactMinutes : null,
+    contactMinutes: situation.readable && course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,

@@ -6,7 +6,7 @@ import { leaveOut, readBlindness } from './blind-order.ts'
 import type { Blindness } from './blind-order.ts'
 import { readStandingHolds } from './order-work.reads.ts'
 import type { StandingHoldRow } from './order-work.reads.ts'
-import { asksForSecond, plannedOf, presentOrderRow } from './orders.present.ts'
+import { asksForSecond, plannedOf, presentOrderRow, signedContent } from './orders.present.ts'
 import { readOrders } from './orders.reads.ts'
 import type { OrderReadRow } from './orders.reads.ts'
 
@@ -22,7 +22,7 @@ export interface OrderWork {
   lastWindowUntil: string | null
 }
 
-/** Signed orders that were not discontinued, each with its plan of doses. */
+/** Signed orders that were not discontinued, each with its plan of doses; none is left of one that is gone with every version. */
 export function openOrders(
   rows: readonly OrderReadRow[],
   now: string,
@@ -32,8 +32,9 @@ export function openOrders(
   return rows.flatMap((row) => {
     const shown = leaveOut(presentOrderRow(row, now, signer), blindness)
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
-    if (!isOpen || row.starts_at === null || row.doses === null) return []
-    const plan = { planned: plannedOf(row), timed: row.contact_minutes !== null }
+    if (!isOpen) return []
+    // a text that cannot be read says of no bath that it is over
+    const plan = { planned: plannedOf(row), timed: signedContent(row)?.fields.timing !== 'indefinite' }
     return [{ row: shown, plan, secondCalculation: asksForSecond(row) }]
   })
 }

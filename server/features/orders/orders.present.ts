@@ -87,6 +87,7 @@ function standingOfRow(row: OrderReadRow): OrderStanding {
     held: row.held,
     ended: row.ended,
     running: row.running,
+    hasRecords: row.done_keys.length > 0,
   }
 }
 

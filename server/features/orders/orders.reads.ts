@@ -39,7 +39,7 @@ export interface OrderReadRow {
   ended: boolean
   done_keys: string[]
   given: number
-  /** A timed bath went in and has no end. */
+  /** A timed bath, or one whose time cannot be read, went in and has no end. */
   running: boolean
   /** The signed version in force as its columns say it; null while none is signed. */
   copies: Copies | null
@@ -70,13 +70,14 @@ const columns = `
   coalesce((SELECT e.kind = 'held' FROM order_events e WHERE e.order_id = o.id AND e.kind <> 'discontinued'
              ORDER BY e.recorded_at DESC, e.happened_at DESC LIMIT 1), false) AS held,
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
-  coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+  coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
              WHERE x.order_id = o.id), '{}') AS done_keys,
-  (SELECT count(*)::int FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+  (SELECT count(*)::int FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
     WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
-  EXISTS (SELECT 1 FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
-           WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded') AND x.contact_minutes IS NOT NULL
-             AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)) AS running,
+  EXISTS (SELECT 1 FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id JOIN contacts_of_doses l ON l.dose_id = d.id
+           WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')
+             AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)
+             AND (l.contact_minutes IS NOT NULL OR NOT l.is_told)) AS running,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
 

@@ -1,6 +1,7 @@
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
+import { orderWords } from '../../../shared/messages/orders.ts'
 import type { RecentDoseRow } from '../administrations/index.ts'
 
 function saidAmount({
@@ -18,7 +19,7 @@ export function doseParams(row: RecentDoseRow): Record<string, string | number> 
     number: row.number,
     key: row.dose_key,
     enclosure: row.enclosure_code,
-    agent: row.agent,
+    ...(row.agent === null ? { drug: orderWords.drugUnknown } : { agent: row.agent }),
     by: row.by_name,
     ...saidAmount(row),
   }

@@ -107,17 +107,20 @@ function recordedItems(row: RecentDoseRow, moment: Moment, mayStop: boolean): To
   const startedAt = row.happened_at.toISOString()
   const wasGiven = wentIn(row)
   const items: TodayWork[] = []
-  if (row.contact_minutes !== null && wasGiven && row.stop_at === null) {
-    const endsAt = addHours(startedAt, row.contact_minutes / minutesPerHour)
+  const isTimed = row.contact_minutes !== null || !row.contact_is_told
+  if (isTimed && wasGiven && row.stop_at === null) {
+    const endsAt =
+      row.contact_minutes === null ? null : addHours(startedAt, row.contact_minutes / minutesPerHour)
     items.push(
       work({
         id: `bath-running:${row.id}`,
         kind: 'bath-running',
-        state: Date.parse(moment.at) > Date.parse(endsAt) ? 'late' : 'running',
+        // of one whose time cannot be read it may be up
+        state: endsAt === null || Date.parse(moment.at) > Date.parse(endsAt) ? 'late' : 'running',
         dueAt: endsAt,
         latestAt: endsAt,
         at: startedAt,
-        params: { ...doseParams(row), doseId: row.id },
+        params: { ...doseParams(row), doseId: row.id, ...(endsAt === null ? { endUntold: 1 } : {}) },
         acts: mayStop ? ['stop-bath'] : [],
       }),
     )

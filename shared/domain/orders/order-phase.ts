@@ -13,6 +13,8 @@ export interface OrderStanding {
   ended: boolean
   /** A timed bath of it goes on: it went in and has no end. */
   running: boolean
+  /** Doses of it stand on record: it was signed, though no version may be left of it. */
+  hasRecords: boolean
 }
 
 /**
@@ -25,6 +27,8 @@ export interface OrderStanding {
 export function orderPhase(standing: OrderStanding, now: Instant): OrderPhase {
   const { signed } = standing
   if (standing.ended) return 'discontinued'
+  // never a draft: what went in under it stands, whatever became of its text
+  if (!signed && standing.hasRecords) return standing.held ? 'held' : 'in-progress'
   if (!signed) return standing.stage === 'proposed' ? 'proposed' : 'draft'
   const isAllRecorded = signed.planned.every((dose) => signed.doneKeys.includes(dose.key))
   if (isAllRecorded && !standing.running) return 'completed'

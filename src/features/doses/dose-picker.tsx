@@ -33,7 +33,7 @@ export function DosePicker({ sheet, zone }: { sheet: BathSheet; zone: string }) 
   const say = (dose: Dose) => {
     const end = dose.state === 'running' ? endsAt(dose.key) : undefined
     // whoever looks for a bath that runs asks when it ends, not when it was planned
-    return end === undefined
+    return end === undefined || end === null
       ? words.doseLine({
           key: dose.key,
           at: sayMoment(dose.dueAt, zone, sheet.now),

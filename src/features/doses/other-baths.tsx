@@ -56,12 +56,20 @@ export function OtherBaths({
 }
 
 function BathTime({ bath, nowMs, zone }: { bath: RunningBath; nowMs: number; zone: string }) {
-  const timer = timerOf(bath, nowMs)
-  const at = { start: sayTime(bath.startedAt, zone), end: sayTime(bath.endsAt, zone) }
+  const { key, startedAt, endsAt } = bath
+  if (endsAt === null)
+    return (
+      <>
+        <b>{words.otherDose({ key })}</b>
+        <p className="t-strong text-magenta">{words.endUntold}</p>
+      </>
+    )
+  const timer = timerOf({ startedAt, endsAt }, nowMs)
+  const at = { start: sayTime(startedAt, zone), end: sayTime(endsAt, zone) }
   return (
     <>
       <p className="row row-wrap">
-        <b>{words.otherDose({ key: bath.key })}</b>
+        <b>{words.otherDose({ key })}</b>
         <span className={timer.isUp ? 't-strong text-magenta' : 't-strong'} role="timer" aria-live="off">
           {timer.isUp ? words.over({ time: clockText(timer.leftMs) }) : clockText(timer.leftMs)}
         </span>

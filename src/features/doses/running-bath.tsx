@@ -24,7 +24,16 @@ export function RunningTime({
 }) {
   const nowMs = useServerMs(now, receivedMs)
   useWakeLock()
-  const timer = timerOf(bath, nowMs)
+  const { startedAt, endsAt } = bath
+  if (endsAt === null)
+    return (
+      <section className="bath-run" aria-label={words.timeLeft}>
+        <p className="t-strong text-magenta" role="alert">
+          {words.endUntold}
+        </p>
+      </section>
+    )
+  const timer = timerOf({ startedAt, endsAt }, nowMs)
   const minutes = (timer.elapsedMs + timer.leftMs) / 60_000
   return (
     <section className="bath-run" aria-label={words.timeLeft}>
@@ -34,7 +43,7 @@ export function RunningTime({
         {timer.isUp ? words.over({ time: clockText(timer.leftMs) }) : clockText(timer.leftMs)}
       </p>
       {timer.isUp ? <p className="t-strong text-magenta">{words.upWords}</p> : null}
-      <TimeBar timer={timer} from={sayTime(bath.startedAt, zone)} until={sayTime(bath.endsAt, zone)} />
+      <TimeBar timer={timer} from={sayTime(startedAt, zone)} until={sayTime(endsAt, zone)} />
       <p className="visually-hidden" aria-live="polite">
         {announcement(timer, minutes)}
       </p>
@@ -79,7 +88,12 @@ export function RunningSteps({
   zone: string
 }) {
   const at = (instant: string) => sayMoment(instant, zone, sheet.now)
-  const out = { at: at(bath.endsAt) }
+  const { endsAt } = bath
+  const sayOut = () => {
+    if (endsAt === null) return words.endUntold
+    const out = { at: at(endsAt) }
+    return Date.parse(endsAt) < Date.parse(sheet.now) ? words.outNow(out) : words.outBy(out)
+  }
   return (
     <Conditions
       heading={record.amountText ?? sheet.drug}
@@ -94,7 +108,7 @@ export function RunningSteps({
         {
           key: 'out',
           state: 'open',
-          what: Date.parse(bath.endsAt) < Date.parse(sheet.now) ? words.outNow(out) : words.outBy(out),
+          what: sayOut(),
         },
       ]}
     />

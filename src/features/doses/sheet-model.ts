@@ -64,12 +64,12 @@ export function bathOf(
   record: RecordedDose,
   { contactMinutes }: Pick<BathSheet, 'contactMinutes'>,
 ): RunningBath {
-  const endsMs = Date.parse(record.happenedAt) + (contactMinutes ?? 0) * 60_000
+  const endsMs = contactMinutes === null ? null : Date.parse(record.happenedAt) + contactMinutes * 60_000
   return {
     doseId: record.id,
     key: record.key,
     startedAt: record.happenedAt,
-    endsAt: new Date(endsMs).toISOString(),
+    endsAt: endsMs === null ? null : new Date(endsMs).toISOString(),
     by: record.by,
   }
 }

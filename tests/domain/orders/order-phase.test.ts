@@ -13,6 +13,7 @@ const signed = (doneKeys: string[] = [], more: Partial<OrderStanding> = {}): Ord
   held: false,
   ended: false,
   running: false,
+  hasRecords: doneKeys.length > 0,
   ...more,
 })
 
@@ -35,7 +36,14 @@ describe('the doses of an order', () => {
 })
 
 describe('the phase of an order', () => {
-  const draft: OrderStanding = { stage: 'draft', signed: null, held: false, ended: false, running: false }
+  const draft: OrderStanding = {
+    stage: 'draft',
+    signed: null,
+    held: false,
+    ended: false,
+    running: false,
+    hasRecords: false,
+  }
   it.each<[string, OrderStanding, number, string]>([
     ['a draft', draft, 0, 'draft'],
     ['a proposal', { ...draft, stage: 'proposed' }, 0, 'proposed'],
@@ -50,6 +58,7 @@ describe('the phase of an order', () => {
     ['all done stays so after the last window', signed(['1', '2', '3']), 200, 'completed'],
     ['the last instant of the last window', signed(['1']), 68, 'in-progress'],
     ['past the last window', signed(['1']), 69, 'expired'],
+    ['gone with its versions, with doses on record', { ...draft, hasRecords: true }, 20, 'in-progress'],
     ['past the last window while a bath runs', signed(['1'], { running: true }), 69, 'in-progress'],
     ['past it while two run', signed(['1', '2'], { running: true }), 69, 'in-progress'],
     ['all recorded while a bath runs', signed(['1', '2', '3'], { running: true }), 20, 'in-progress'],
