@@ -82,6 +82,29 @@ describe('bodies without a name where two cases live', () => {
       [extended, [null, null]],
     ]
     expect(await standing()).toEqual(again)
+    // the one that lost its name, not the one that was explained, waits for a name, and is given one
+    const toName = async () => {
+      const { rows } = (await vet.agent.get('/api/observations?bodies=to-name').expect(200)).body
+      return rows
+        .filter((row: { id: string }) => row.id === id)
+        .map((row: { bodiesToName: number }) => row.bodiesToName)
+    }
+    expect(await toName()).toEqual([1])
+    const other = { id: api.nextId(), accession: both[0].animal.accession, count: 1 }
+    expect((await name(id, { deaths: [{ ...other, count: 2 }] })).status).toBe(422)
+    expect((await name(id, { deaths: [other] })).status).toBe(201)
+    expect(await toName()).toEqual([])
+    expect(await standing()).toEqual([
+      [extended, expect.arrayContaining([other.accession, null])],
+      [extended, [null]],
+    ])
+    expect((await name(id, { deaths: [], reason: 'nobody knows' })).body.code).toBe('already-explained')
+    await vet.agent
+      .post(`/api/animals/${other.accession}/deaths/${other.id}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'It was none of these either' })
+      .expect(200)
+    expect(await standing()).toEqual(again)
     // also by a case that is entered later
     const at = '2026-11-10T14:00:00Z'
     const { enclosure, taxonId } = both[0]

@@ -6,7 +6,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import { refusedInput } from '../../platform/http/refused-input.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { CaseWriter, CaseWriterParts } from './case-writer.ts'
-import type { ObservationRow } from './observation.entity.ts'
+import type { ObservationBodiesRow } from './observation.entity.ts'
 import * as repository from './observations.repository.ts'
 import type { UnnamedBodies } from './unnamed-bodies.ts'
 
@@ -18,41 +18,47 @@ export function createBodiesService(
 ) {
   const { animals, unnamed, writer } = parts
 
-  function check(row: ObservationRow, given: Given): number {
-    const named = given.deaths.reduce((sum, { count }) => sum + count, 0)
-    if (named > row.unassignedDead)
-      throw refusedInput(
-        '/deaths',
-        observationDetails.moreThanBodies({ left: row.unassignedDead }),
-        'too-many',
-      )
-    if (named < row.unassignedDead && given.reason === undefined)
+  const namedBy = ({ deaths }: Given) => deaths.reduce((sum, { count }) => sum + count, 0)
+
+  /** @param left bodies that wait for a name */
+  function check(left: number, given: Given): void {
+    const named = namedBy(given)
+    if (named > left) throw refusedInput('/deaths', observationDetails.moreThanBodies({ left }), 'too-many')
+    if (named < left && given.reason === undefined)
       throw new Problem('reason-needed', {
         detail: observationDetails.restNeedsReason,
         errors: [{ pointer: '/reason', detail: observationDetails.restNeedsReason, code: 'reason-needed' }],
       })
-    return named
   }
 
   return {
-    /** Names the bodies of an observation, once; what nobody will ever know is explained in words. */
+    /** Names the bodies of an observation, and again those whose death was struck out; what nobody will ever know is explained in words. */
     async nameBodies(context: RequestContext, observationId: string, given: Given): Promise<void> {
       await parts.transactions.inTransaction(context, async (tx) => {
         const row = await repository.findObservation(tx, observationId)
         if (!row) throw new Problem('not-found')
-        const named = check(row, given)
+        const named = namedBy(given)
+        const heads = await unnamed.lock(tx, observationId)
+        const earlier = await repository.findBodies(tx, observationId)
+        const isSentAgain = earlier.some(({ id }) => id === given.id)
+        const again = await repository.countNamedByStruck(tx, observationId)
+        const total = (count: (one: ObservationBodiesRow) => number) =>
+          earlier.reduce((sum, one) => sum + count(one), 0)
+        const left = row.unassignedDead + again - total((one) => one.settledCount ?? row.unassignedDead)
+        if (!isSentAgain) {
+          if (left <= 0) throw new Problem('already-explained')
+          check(left, given)
+        }
         const bodies = {
           id: given.id,
           observationId,
           namedCount: named,
+          namingNo: earlier.length + 1,
+          settledCount: left,
           reason: given.reason ?? null,
           recordedAt: tx.at,
           recordedBy: tx.actor.personId,
         }
-        const heads = await unnamed.lock(tx, observationId)
-        const earlier = await repository.findBodies(tx, observationId)
-        if (earlier && earlier.id !== given.id) throw new Problem('already-explained')
-        if (row.unassignedDead === 0) throw new Problem('already-explained')
         if (await repository.isVoided(tx, observationId)) throw new Problem('already-void')
         if (!(await repository.insertBodies(tx, bodies)).created) return
         const { happenedAt, happenedOn } = row
@@ -61,8 +67,8 @@ export function createBodiesService(
         // is left stays where it was
         if (named > 0) {
           await unnamed.withdraw(tx, heads, { observationId, reason: observationDetails.bodiesNamed })
-          const again = await repository.countNamedByStruck(tx, observationId)
-          await unnamed.enter(tx, heads, { count: row.unassignedDead - named + again, observationId }, times)
+          const count = row.unassignedDead + again - total(({ namedCount }) => namedCount) - named
+          await unnamed.enter(tx, heads, { count, observationId }, times)
         }
         for (const [i, death] of given.deaths.entries()) {
           try {
@@ -86,7 +92,7 @@ export function createBodiesService(
         tx.audit({
           action: 'observation.name-bodies',
           subject: { kind: 'observation', id: observationId, label: observationId },
-          before: { withoutName: row.unassignedDead },
+          before: { withoutName: left },
           after: {
             named: given.deaths.map(({ accession, count }) => ({ accession, count })),
             reason: given.reason,

@@ -70,6 +70,10 @@ export class ObservationBodiesRow {
   @Column({ type: 'uuid', name: 'observation_id' }) observationId!: string
   /** Of the bodies without a name, those named now. */
   @Column({ type: 'integer', name: 'named_count' }) namedCount!: number
+  /** The how manieth naming of this look; null, the first, in older records. */
+  @Column({ type: 'integer', name: 'naming_no', nullable: true }) namingNo!: number | null
+  /** Bodies that waited for a name then, named or explained; null, all without a name, in older records. */
+  @Column({ type: 'integer', name: 'settled_count', nullable: true }) settledCount!: number | null
   @Column({ type: 'text', nullable: true }) reason!: string | null
   @Column({ type: 'timestamptz', name: 'recorded_at' }) recordedAt!: Date
   @Column({ type: 'uuid', name: 'recorded_by', nullable: true }) recordedBy!: string | null

@@ -6,6 +6,7 @@ import type {
   Skin,
 } from '../../../shared/domain/observations/observation.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { namedByStruck } from './observations.repository.ts'
 import { seenByAnother } from './notices.reads.ts'
 
 export interface ObservationReadRow {
@@ -62,6 +63,11 @@ export interface ObservationsFilter {
 
 const notStruck = `NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)`
 
+/** Bodies of a look that wait for a name: found without one, or without one again since their death was struck out. */
+const bodiesToName = `(o.unassigned_dead + ${namedByStruck}
+    - (SELECT coalesce(sum(coalesce(z.settled_count, o.unassigned_dead)), 0)::int FROM observation_bodies z
+        WHERE z.observation_id = o.id))`
+
 /** One page of them by themselves: what came of each is looked up for those that are shown, not for all of the house. */
 const observationPage = `
   SELECT o.*, count(*) OVER ()::int AS total
@@ -72,8 +78,9 @@ const observationPage = `
      AND ($3::text IS NULL OR o.enclosure_id = (SELECT e.id FROM enclosures e WHERE e.code = $3))
      AND (NOT $4::boolean OR (o.for_veterinarian AND ${notStruck}
           AND NOT EXISTS (SELECT 1 FROM observation_reviews r WHERE r.observation_id = o.id)))
-     AND (NOT $7::boolean OR (o.unassigned_dead > 0 AND ${notStruck}
-          AND NOT EXISTS (SELECT 1 FROM observation_bodies b WHERE b.observation_id = o.id)))
+     AND (NOT $7::boolean OR (${notStruck} AND ${bodiesToName} > 0
+          AND (o.unassigned_dead > 0 OR o.id IN (SELECT k.observation_id FROM observation_deaths k
+                                                   JOIN animal_voids s ON s.death_id = k.death_id))))
    ORDER BY o.happened_at DESC, o.id DESC
    LIMIT $5 OFFSET $6`
 
@@ -87,8 +94,8 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
             o.happened_at, o.happened_on::text AS happened_on, o.said_at, o.time_doubtful, o.recorded_at,
             o.recorded_by, w.printed_name AS recorded_by_name, o.origin, o.looked_at, o.feeding, o.breathing, o.skin,
             o.signs, o.words, o.count_basis, o.count_low, o.count_high, o.found_dead, o.unassigned_dead,
-            CASE WHEN b.id IS NULL AND v.id IS NULL THEN o.unassigned_dead ELSE 0 END AS bodies_to_name,
-            b.named_count AS bodies_named, b.reason AS bodies_reason, bp.printed_name AS bodies_by,
+            CASE WHEN v.id IS NULL THEN ${bodiesToName} ELSE 0 END AS bodies_to_name,
+            b.named_in_all AS bodies_named, b.reason AS bodies_reason, bp.printed_name AS bodies_by,
             b.recorded_at AS bodies_at, o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,
             r.words AS reviewed_words, v.reason AS voided_reason,
             CASE WHEN v.id IS NULL THEN '[]'::json
@@ -111,7 +118,8 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
                            ORDER BY r.recorded_at DESC, r.id DESC LIMIT 1) r ON true
        LEFT JOIN people rp ON rp.id = r.recorded_by
        LEFT JOIN observation_voids v ON v.observation_id = o.id
-       LEFT JOIN observation_bodies b ON b.observation_id = o.id
+       LEFT JOIN LATERAL (SELECT b.*, sum(b.named_count) OVER ()::int AS named_in_all FROM observation_bodies b
+                           WHERE b.observation_id = o.id ORDER BY coalesce(b.naming_no, 1) DESC LIMIT 1) b ON true
        LEFT JOIN people bp ON bp.id = b.recorded_by
        LEFT JOIN notices n ON n.observation_id = o.id
       ORDER BY o.happened_at DESC, o.id DESC`,

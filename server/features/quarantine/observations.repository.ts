@@ -57,8 +57,8 @@ export function isVoided(tx: Tx, observationId: string): Promise<boolean> {
   return tx.manager.existsBy(ObservationVoidRow, { observationId })
 }
 
-export function findBodies(tx: Tx, observationId: string): Promise<ObservationBodiesRow | null> {
-  return tx.manager.findOneBy(ObservationBodiesRow, { observationId })
+export function findBodies(tx: Tx, observationId: string): Promise<ObservationBodiesRow[]> {
+  return tx.manager.findBy(ObservationBodiesRow, { observationId })
 }
 
 export function insertBodies(tx: Tx, row: ObservationBodiesRow): Promise<{ created: boolean }> {
@@ -74,8 +74,12 @@ export interface OpenBodiesRow {
 }
 
 /** Bodies that an observation `o` had named by deaths that were struck out since: they are without a name again. */
-const namedByStruck = `(SELECT coalesce(sum(d.seen_count), 0)::int FROM observation_deaths k
+export const namedByStruck = `(SELECT coalesce(sum(d.seen_count), 0)::int FROM observation_deaths k
     JOIN deaths d ON d.id = k.death_id JOIN animal_voids s ON s.death_id = d.id WHERE k.observation_id = o.id)`
+
+/** Bodies of an observation `o` that have no name, explained or not. */
+const withoutName = `(o.unassigned_dead + ${namedByStruck}
+    - (SELECT coalesce(sum(b.named_count), 0)::int FROM observation_bodies b WHERE b.observation_id = o.id))`
 
 /** How many bodies of an observation lost their name again. */
 export async function countNamedByStruck(tx: Tx, observationId: string): Promise<number> {
@@ -110,10 +114,10 @@ export function findOpenBodies(
 ): Promise<OpenBodiesRow[]> {
   return tx.manager.query(
     `SELECT o.id, o.enclosure_id, o.happened_at, o.happened_on::text AS happened_on,
-            o.unassigned_dead - coalesce(b.named_count, 0) + ${namedByStruck} AS left_count
-       FROM observations o LEFT JOIN observation_bodies b ON b.observation_id = o.id
+            ${withoutName} AS left_count
+       FROM observations o
       WHERE o.enclosure_id = ANY ($2::uuid[]) 
-        AND o.unassigned_dead - coalesce(b.named_count, 0) + ${namedByStruck} > 0
+        AND ${withoutName} > 0
         AND NOT EXISTS (SELECT 1 FROM observation_voids v WHERE v.observation_id = o.id)
         AND NOT EXISTS (SELECT 1 FROM case_events e
                          WHERE e.case_id = $1 AND e.observation_id = o.id AND e.kind = 'death')
