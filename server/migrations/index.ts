@@ -24,6 +24,7 @@ import { AmountsLearnt1764600000038 } from './0038-amounts-learnt.ts'
 import { SignInsOfAnAddress1764600000039 } from './0039-sign-ins-of-an-address.ts'
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
 import { DosesOfGoneOrders1764600000041 } from './0041-doses-of-gone-orders.ts'
+import { CalculationsAgreed1764600000042 } from './0042-calculations-agreed.ts'
 import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
 
@@ -56,6 +57,7 @@ export const migrations = [
   SignInsOfAnAddress1764600000039,
   RowMarkLookup1764600000040,
   DosesOfGoneOrders1764600000041,
+  CalculationsAgreed1764600000042,
   ContactsOfDoses1764600000044,
   BodiesNamedAgain1764600000045,
 ]

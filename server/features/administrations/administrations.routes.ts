@@ -47,8 +47,8 @@ export function administrationRoutes(
     }),
     route(contracts.recordDose, async ({ params, body, context }) => {
       await service.recordDose(context, params.number, params.key, body)
-      // with its amounts: whoever put in ten times as much is told so at once
-      return queries.sheet(params.number, params.key, false, context)
+      // with its amounts: whoever put in ten times as much is told so at once; where nothing went in there is none to tell
+      return queries.sheet(params.number, params.key, body.kind !== 'recorded', context)
     }),
     route(contracts.strikeDoseRecord, async ({ params, body, context }) => {
       const doseId = await service.strikeDoseRecord(context, params, body)

@@ -77,9 +77,13 @@ export function createAdministrations(
     const found = await read(number, key)
     const { actor } = context
     const { versionId, row } = found.situation
+    // a dose with a record is to come again where that is struck out
+    const isRecorded = found.situation.records.some((record) => record.dose_key === key)
     const elsewhere = (await orders.queries.amountsToNote(number, actor))
       .map((one) =>
-        one.orderId === row.id ? { ...one, keys: one.keys.filter((other) => other !== key) } : one,
+        one.orderId === row.id && !isRecorded
+          ? { ...one, keys: one.keys.filter((other) => other !== key) }
+          : one,
       )
       .filter(({ keys }) => keys.length > 0)
     const mayBeSecondElsewhere = elsewhere.length > 0

@@ -85,9 +85,15 @@ function ofOneAlike(row: LearntRow, { signed_at }: AlikeRow): Knower[] {
   return isForgotten || row.worked_out_blind ? [] : [{ personId: row.person_id, key: null, firstOf: null }]
 }
 
-/** Orders that were not discontinued and have a dose without a record; of the order that a query calls o. */
+/**
+ * Orders that were not discontinued and have a dose without a record, or with one that no two calculations stand behind:
+ * struck out, it is to come again. Of the order that a query calls o.
+ */
 const hasDosesToCome = `NOT EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued')
   AND (SELECT count(DISTINCT d.dose_key) FROM live_doses d JOIN order_versions x ON x.id = d.order_version_id
+         JOIN calculations_agreed a ON a.dose_key = d.dose_key
+          AND a.order_version_id = (SELECT n.id FROM order_versions n WHERE n.order_id = o.id
+                                     ORDER BY n.version_no DESC LIMIT 1)
         WHERE x.order_id = o.id) < (SELECT max(x.doses) FROM order_versions x WHERE x.order_id = o.id)`
 
 /** Orders for a drug in some enclosures with a dose to come: an amount worked out there is theirs as well. */

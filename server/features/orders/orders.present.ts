@@ -1,7 +1,7 @@
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { orderPhase } from '../../../shared/domain/orders/order-phase.ts'
-import type { OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
+import type { OrderPhase, OrderStanding } from '../../../shared/domain/orders/order-phase.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import type { PlannedDose } from '../../../shared/domain/schedule/plan-doses.ts'
 import { differingCopies } from './compare-copies.ts'
@@ -99,17 +99,27 @@ export function asksForSecond(row: OrderReadRow): boolean {
 }
 
 /**
- * The doses that are still to come of an order that asks for a second calculation: until each is recorded, its amount is
- * for nobody who may be the one to calculate it blind.
+ * The doses of an order that asks for a second calculation for which somebody may still be asked: those to come, and
+ * until the last window is over those that a strike would open again with no two calculations that agree. Until then
+ * the amount is for nobody who may be the one to calculate it blind.
  */
 export function blindKeys(row: OrderReadRow, now: string): string[] {
-  const phase = orderPhase(standingOfRow(row), now)
-  const isOpen = phase === 'not-started' || phase === 'in-progress' || phase === 'held'
-  if (!isOpen || !asksForSecond(row)) return []
+  const standing = standingOfRow(row)
+  const phase = orderPhase(standing, now)
+  // completed: as it would stand with its records struck out
+  const isOpen = (one: OrderPhase) => one === 'not-started' || one === 'in-progress' || one === 'held'
+  const mayOpen =
+    isOpen(phase) || (phase === 'completed' && isOpen(orderPhase(withoutRecords(standing), now)))
+  if (!mayOpen || !asksForSecond(row)) return []
   return plannedOf(row)
     .map(({ key }) => key)
-    .filter((key) => !row.done_keys.includes(key))
+    .filter((key) => !row.done_keys.includes(key) || !row.agreed_keys.includes(key))
 }
+
+const withoutRecords = ({ signed, ...standing }: OrderStanding): OrderStanding => ({
+  ...standing,
+  signed: signed && { ...signed, doneKeys: [] },
+})
 
 /** Whether the text in force is still the one that was sealed; a key from elsewhere says nothing against it. */
 const isSealBroken = ({ signed_text, seal }: OrderReadRow, signer: Pick<Signer, 'check'>): boolean =>

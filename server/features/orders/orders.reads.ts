@@ -38,6 +38,8 @@ export interface OrderReadRow {
   held: boolean
   ended: boolean
   done_keys: string[]
+  /** Doses whose two calculations agree, under the version in force. */
+  agreed_keys: string[]
   given: number
   /** A timed bath, or one whose time cannot be read, went in and has no end. */
   running: boolean
@@ -72,6 +74,7 @@ const columns = `
   EXISTS (SELECT 1 FROM order_events e WHERE e.order_id = o.id AND e.kind = 'discontinued') AS ended,
   coalesce((SELECT array_agg(DISTINCT d.dose_key) FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
              WHERE x.order_id = o.id), '{}') AS done_keys,
+  coalesce((SELECT array_agg(a.dose_key) FROM calculations_agreed a WHERE a.order_version_id = v.id), '{}') AS agreed_keys,
   (SELECT count(*)::int FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
     WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
   EXISTS (SELECT 1 FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id JOIN contacts_of_doses l ON l.dose_id = d.id
