@@ -115,6 +115,7 @@ export const cautionTitles = defineMessages({
   'dose-late': 'Dose is late',
   'doses-past-plan': 'All planned doses are given',
   'same-agent-together': 'The same drug is ordered for this water already',
+  'same-agent-same-day': 'The same drug within a day by another order',
   'agents-not-together': 'Drugs that do not go together',
   'agent-in-water': 'Another drug is in this water',
   'agent-same-day': 'Another drug within a day',
@@ -312,6 +313,8 @@ export const cautionTexts = defineMessages({
     `${hours(p.hours)} after the last dose. The window closed after ${hours(p.latestHours)}.`,
   'doses-past-plan': (p) =>
     `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} ${p.given === 1 ? 'is' : 'are'} given.`,
+  'same-agent-same-day': (p) =>
+    `Order ${p.orderNumber} gives the same drug into this connected water within a day. Neither order counts the other: look at both together.`,
   'same-agent-together': (p) =>
     `Order ${p.orderNumber} gives the same drug into this connected water at the same time. Together the animals get both doses.`,
   'agents-not-together': (p) =>

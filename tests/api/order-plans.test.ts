@@ -77,7 +77,9 @@ describe('the plan of an order', () => {
       .post(`/api/doses/${doseId}/stop`)
       .send({ id: api.nextId(), cause: 'time-up', happenedAt: '2026-12-01T18:19:00Z', rescue: 'carbon on' })
       .expect(201)
-    expect((await rulesOf(second.number)).join()).not.toContain('R29')
+    // out of the water, and still twice in a day
+    const after = (await rulesOf(second.number)).filter((rule) => rule.startsWith('R29'))
+    expect(after).toEqual(['R29 warning same-agent-same-day'])
   })
 
   it('counts what earlier versions gave, and says so; doses are given in their order', async () => {

@@ -67,7 +67,6 @@ describe('what may be signed: an order', () => {
     expect((await signDraft(api, draft)).body.code).toBe('licence-not-valid')
     await lengthen(-365)
     await owner.query(`SET session_replication_role = DEFAULT`)
-    expect((await signDraft(api, draft)).status).not.toBe(403)
   })
 
   it('with a figure far beyond every dose line of the drug is signed by nobody, whether it names one or not', async () => {

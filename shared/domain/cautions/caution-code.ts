@@ -132,6 +132,7 @@ export interface CautionParams {
   'dose-late': { hours: number; latestHours: number }
   'doses-past-plan': { given: number; planned: number }
   'same-agent-together': { orderNumber: string }
+  'same-agent-same-day': { orderNumber: string }
   'agents-not-together': { orderNumber: string; agent: AgentCode }
   'agent-in-water': { orderNumber: string; agent: AgentCode }
   'agent-same-day': { orderNumber: string; agent: AgentCode }

@@ -44,18 +44,26 @@ export const otherAgents = defineRule({
       if (pair.includes('formalin') && pair.includes('potassium-permanganate')) return []
       const hours = hoursApart(use, facts, stage)
       const together = hours <= 0
-      if (agent === facts.agent)
-        return together
-          ? [
-              {
-                code: 'same-agent-together',
-                level: 'stop',
-                params: { orderNumber },
-                resolvedBy: ['amend-order', 'wait-between-agents'],
-              },
-            ]
-          : []
+      if (agent === facts.agent && together)
+        return [
+          {
+            code: 'same-agent-together',
+            level: 'stop',
+            params: { orderNumber },
+            resolvedBy: ['amend-order', 'wait-between-agents'],
+          },
+        ]
       if (!(hours < sameDayHours)) return []
+      // each order is within what its line allows a day; the two of them together are counted by nobody
+      if (agent === facts.agent)
+        return [
+          {
+            code: 'same-agent-same-day',
+            level: 'warning',
+            params: { orderNumber },
+            resolvedBy: ['amend-order', 'wait-between-agents'],
+          },
+        ]
       const apart = notTogether(facts.agent, agent)
       const level: CautionLevel = apart ? 'stop' : together ? 'warning' : 'note'
       return [
