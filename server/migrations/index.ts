@@ -25,6 +25,7 @@ import { SignInsOfAnAddress1764600000039 } from './0039-sign-ins-of-an-address.t
 import { RowMarkLookup1764600000040 } from './0040-row-mark-lookup.ts'
 import { DosesOfGoneOrders1764600000041 } from './0041-doses-of-gone-orders.ts'
 import { CalculationsAgreed1764600000042 } from './0042-calculations-agreed.ts'
+import { OrdersAlikeByWater1764600000043 } from './0043-orders-alike-by-water.ts'
 import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
 
@@ -58,6 +59,7 @@ export const migrations = [
   RowMarkLookup1764600000040,
   DosesOfGoneOrders1764600000041,
   CalculationsAgreed1764600000042,
+  OrdersAlikeByWater1764600000043,
   ContactsOfDoses1764600000044,
   BodiesNamedAgain1764600000045,
 ]

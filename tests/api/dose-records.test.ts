@@ -1,7 +1,7 @@
 import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { anEnclosure } from '../builders/a-water.ts'
-import { aBathWater, aSchool } from '../builders/an-order.ts'
+import { aBathWater, determineBathWater, aSchool } from '../builders/an-order.ts'
 import { aFormalinHouse, bathAmount } from '../builders/a-bath.ts'
 import type { OrderRow } from '../../shared/contracts/orders.contract.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
@@ -229,6 +229,9 @@ describe('what was recorded under one order tells the amount of the next for tha
     const keeper = await api.as('keeper')
     expect(await read(keeper, `/api/orders/${over}`)).toMatch(shows)
     const other = { tank: { ...beside, sumpId: tank.sumpId }, school: await aSchool(api, beside.id, 90) }
+    // determined anew between the two: the amount of the one still tells that of the other
+    const bodies = [tank, { waterBodyId: tank.sumpId }, beside]
+    await determineBathWater(api, 'QT-90', bodies, '2026-12-01T14:00:00Z')
     const number = await house.signedBath(other)
     expect(await read(keeper, `/api/orders/${over}`)).not.toMatch(shows)
     expect(JSON.parse(await read(house.technician, `/api/orders/${number}`)).amountsWithheld).toBe(false)

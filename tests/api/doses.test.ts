@@ -74,7 +74,7 @@ const at = (number: string, rest = '') => `/api/orders/${number}/doses/1${rest}`
 const amount = { value: '218', unit: 'mL' }
 const secondBody = (given: object = {}) => ({
   id: api.nextId(),
-  enclosureRead: 'qt-3',
+  enclosureRead: 'qt 3', // a phone's space for the hyphen
   markRead: '0.68 m',
   lotRead: 'PZ-0317',
   strengthRead: { value: '37', unit: 'percent_w_w' },

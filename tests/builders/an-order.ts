@@ -17,6 +17,17 @@ export async function aBathWater(
   const sumpId = await aWaterBody(api, `S-${code}`)
   await aValve(api, `V-${code}`, [tank.waterBodyId, sumpId])
   for (const other of joined) await aValve(api, `V-${other.code}`, [sumpId, other.waterBodyId])
+  await determineBathWater(api, code, [tank, { waterBodyId: sumpId }, ...joined])
+  return { ...tank, sumpId }
+}
+
+/** Its volume, measured by one person and confirmed by another; also anew. */
+export async function determineBathWater(
+  api: TestApi,
+  code: string,
+  bodies: readonly { waterBodyId: string }[],
+  happenedAt = '2026-11-30T14:00:00Z',
+): Promise<void> {
   const id = api.nextId()
   await (
     await api.as('technician')
@@ -24,8 +35,8 @@ export async function aBathWater(
     .post(`/api/enclosures/${code}/volumes`)
     .send({
       id,
-      happenedAt: '2026-11-30T14:00:00Z',
-      waterBodyIds: [tank.waterBodyId, sumpId, ...joined.map(({ waterBodyId }) => waterBodyId)],
+      happenedAt,
+      waterBodyIds: bodies.map(({ waterBodyId }) => waterBodyId),
       sheet: aTankAndSumpSheet,
     })
     .expect(201)
@@ -36,7 +47,6 @@ export async function aBathWater(
     .set('Idempotency-Key', newKey())
     .send({})
     .expect(200)
-  return { ...tank, sumpId }
 }
 
 /** Readings of a moment in one body of water. */

@@ -33,6 +33,9 @@ export interface FirstCalculation {
 }
 
 const sameText = (a: string, b: string) => a.trim().toLowerCase() === b.trim().toLowerCase()
+/** "qt 1" is the label QT-1: on a phone a space is nearer than a hyphen. What follows it is not: QT-11 is another tank. */
+const sameCode = (a: string, b: string) =>
+  sameText(a.replace(/[\s‐‑–-]+/g, '-'), b.replace(/[\s‐‑–-]+/g, '-'))
 const agreedShare = 1e-6
 
 /** The same strength, perhaps in another unit of the same kind. */
@@ -51,7 +54,7 @@ export function compareCalculations(
 ): { differs: Difference[]; agreement: Agreement | null } {
   const agreement = secondCalculationAgrees(first.amount, second.amount, first.division)
   const differs: Difference[] = []
-  if (!sameText(second.enclosureRead, first.enclosureCode)) differs.push('enclosure')
+  if (!sameCode(second.enclosureRead.trim(), first.enclosureCode)) differs.push('enclosure')
   if (judgeMark(second.markRead, first.marks, first.allowedDriftPercent) === 'differs') differs.push('mark')
   if (!sameText(second.lotRead, first.lotNumber)) differs.push('lot')
   if (first.strength && !sameStrength(second.strength, first.strength)) differs.push('strength')
