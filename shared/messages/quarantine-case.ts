@@ -1,4 +1,5 @@
 import type { CaseDetail } from '../contracts/quarantine.contract.ts'
+import type { ClockEventKind } from '../domain/quarantine/clock-event.ts'
 import { tooSoonAfterMasking } from './quarantine.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
@@ -90,6 +91,7 @@ export const caseWords = defineMessages({
   place: 'In',
   cameIn: 'Came in',
   gone: 'gone',
+  elsewhere: 'not under this case',
   fromSplit: 'taken out of a group of the batch',
   locks: 'Locks and holds',
   lockLine: (p: { cause: string; at: string; by: string }) => `${p.cause}, since ${p.at}${p.by}`,
@@ -123,8 +125,15 @@ export const deathFindingWords = defineMessages({
   'explained-transmissible': 'explained, transmissible',
 } satisfies Record<CaseDetail['deaths'][number]['finding'], string>)
 
-/** Events of a clock, as their list names them. A kind without a name of its own stands as it is kept. */
+/** Events of a clock, as their list names them. A kind of a later version stands as it is kept. */
 export const caseEventWords: Readonly<Record<string, string>> = defineMessages({
+  arrival: 'Came into the batch',
+  'sample-result': 'Result of a sample',
+  'treatment-started': 'Treatment begun',
+  'treatment-ended': 'Treatment ended',
+  'transferred-out': 'Taken out of the case',
+  'exposure-decided': 'Exposure decided',
+  'cleared-water-joined': 'Joined to water that was cleared',
   entry: 'Came into the water',
   closed: 'Batch closed',
   addition: 'Came into the water or room',
@@ -147,4 +156,4 @@ export const caseEventWords: Readonly<Record<string, string>> = defineMessages({
   unlocked: 'Lifted',
   voided: 'Event voided',
   cleared: 'Cleared',
-})
+} satisfies Record<ClockEventKind, string> & Record<string, string>)

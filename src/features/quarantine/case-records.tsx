@@ -92,7 +92,7 @@ const batchColumns = (zone: string, now: string): TableColumn<CaseMember>[] => [
     narrow: 'short',
     cell: (row) =>
       row.enclosure === null ? (
-        <span className="t-2">{words.gone}</span>
+        <span className="t-2">{row.animals.high === 0 ? words.gone : words.elsewhere}</span>
       ) : (
         <Link to={paths.enclosure(row.enclosure)}>{row.enclosure}</Link>
       ),
