@@ -253,11 +253,13 @@ describe('what an agent leaves in water that is parted later', () => {
     const here = async () => {
       const { agent } = await api.as('veterinarian')
       const { body } = await agent.post('/api/order-previews').send(prolonged(beside.id, [])).expect(200)
-      return body.cautions
-        .filter(({ ruleId }: { ruleId: string }) => ruleId === 'R29')
-        .map(({ code }: { code: string }) => code)
-        // that the drug was in some water of the day, and is out, is said besides
-        .filter((code: string) => code !== 'same-agent-same-day')
+      return (
+        body.cautions
+          .filter(({ ruleId }: { ruleId: string }) => ruleId === 'R29')
+          .map(({ code }: { code: string }) => code)
+          // that the drug was in some water of the day, and is out, is said besides
+          .filter((code: string) => code !== 'same-agent-same-day')
+      )
     }
     expect(await here()).toEqual([])
     // given while the valve was shut, and never let through
