@@ -22,15 +22,26 @@ export interface OrderWork {
   lastWindowUntil: string | null
 }
 
-/** Signed orders that were not discontinued, each with its plan of doses; none is left of one that is gone with every version. */
-export function openOrders(
-  rows: readonly OrderReadRow[],
+interface ShownOrder {
+  row: OrderReadRow
+  shown: OrderRow
+}
+
+/** All orders as they are shown, each made and its signature checked once, and for whom amounts are left out. */
+async function readShown(
+  db: Db,
   now: string,
-  blindness: Blindness,
   signer: Pick<Signer, 'check'>,
-) {
-  return rows.flatMap((row) => {
-    const shown = leaveOut(presentOrderRow(row, now, signer), blindness)
+): Promise<{ orders: ShownOrder[]; blindness: Blindness }> {
+  const rows = await readOrders(db, {})
+  const blindness = await readBlindness(db, rows, now, { areAll: true })
+  const orders = rows.map((row) => ({ row, shown: leaveOut(presentOrderRow(row, now, signer), blindness) }))
+  return { orders, blindness }
+}
+
+/** Signed orders that were not discontinued, each with its plan of doses; none is left of one that is gone with every version. */
+function openOrders(shownRows: readonly ShownOrder[]) {
+  return shownRows.flatMap(({ row, shown }) => {
     const isOpen = !['draft', 'proposed', 'discontinued'].includes(shown.phase)
     if (!isOpen) return []
     // a text that cannot be read says of no bath that it is over
@@ -40,6 +51,15 @@ export function openOrders(
 }
 
 export type OpenOrder = ReturnType<typeof openOrders>[number]
+
+/** The plans of the open orders alone. */
+export async function readOpenOrders(
+  db: Db,
+  now: string,
+  signer: Pick<Signer, 'check'>,
+): Promise<OpenOrder[]> {
+  return openOrders((await readShown(db, now, signer)).orders)
+}
 
 export interface OrdersAtWork {
   waiting: OrderWork[]
@@ -57,25 +77,20 @@ export async function readOrderWork(
   now: string,
   signer: Pick<Signer, 'check'>,
 ): Promise<OrdersAtWork> {
-  const [rows, holds] = await Promise.all([readOrders(db, {}), readStandingHolds(db)])
-  const blindness = await readBlindness(db, rows, now, { areAll: true })
+  const [{ orders, blindness }, holds] = await Promise.all([
+    readShown(db, now, signer),
+    readStandingHolds(db),
+  ])
   return {
-    waiting: waitingOrders(rows, holds, now, blindness, signer),
-    open: openOrders(rows, now, blindness, signer),
+    waiting: waitingOrders(orders, holds),
+    open: openOrders(orders),
     leftOutFor: (actor) =>
-      new Set(rows.filter((row) => blindness.isLeftOutFor(row.id, actor)).map((row) => row.number)),
+      new Set(orders.filter(({ row }) => blindness.isLeftOutFor(row.id, actor)).map(({ row }) => row.number)),
   }
 }
 
-function waitingOrders(
-  rows: readonly OrderReadRow[],
-  holds: readonly StandingHoldRow[],
-  now: string,
-  blindness: Blindness,
-  signer: Pick<Signer, 'check'>,
-): OrderWork[] {
-  return rows.flatMap((row): OrderWork[] => {
-    const order = leaveOut(presentOrderRow(row, now, signer), blindness)
+function waitingOrders(orders: readonly ShownOrder[], holds: readonly StandingHoldRow[]): OrderWork[] {
+  return orders.flatMap(({ row, shown: order }): OrderWork[] => {
     const waits = row.stage !== 'none' || order.phase === 'held' || order.phase === 'expired'
     if (!waits || order.phase === 'discontinued') return []
     const hold = order.phase === 'held' ? holds.find((one) => one.order_id === row.id) : undefined

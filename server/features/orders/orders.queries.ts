@@ -13,7 +13,7 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
 import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
-import { openOrders } from './order-work.ts'
+import { readOpenOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { standInGone, standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
@@ -196,11 +196,7 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     idOf: async (number: string): Promise<string> => (await rowOf(number)).id,
 
     /** Signed orders that are not ended, with their plan: what worklists ask. */
-    async open() {
-      const now = parts.now().toISOString()
-      const rows = await readOrders(parts.dataSource, {})
-      return openOrders(rows, now, await readBlindness(parts.dataSource, rows, now, { areAll: true }), signer)
-    },
+    open: () => readOpenOrders(parts.dataSource, parts.now().toISOString(), signer),
 
     /** Holds and ends of an order, the newest first. */
     events: (orderId: string) => readEvents(parts.dataSource, orderId),
