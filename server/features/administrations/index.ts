@@ -25,6 +25,7 @@ import type { Calculations } from './second-person.ts'
 import { createSheetPrinter, sheetPrintKind } from './print-sheet.ts'
 
 export type { RecentDoseRow } from './dose-work.reads.ts'
+export { endOfBath } from './running-baths.ts'
 export { verifyOverrides } from './signed-overrides.ts'
 export const administrationEntities = [DoseCalculation, DoseRow, BathStopRow, DoseVoidRow, DoseOverrideRow]
 

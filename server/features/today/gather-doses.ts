@@ -4,6 +4,7 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { addDays } from '../../../shared/domain/time/facility-date.ts'
 import { addHours } from '../../../shared/domain/time/instant-arithmetic.ts'
 import { startOfFacilityDay } from '../../../shared/domain/time/local-time.ts'
+import { endOfBath } from '../administrations/index.ts'
 import type { Administrations, RecentDoseRow } from '../administrations/index.ts'
 import type { OrdersAtWork } from '../orders/index.ts'
 import { doseParams } from './dose-params.ts'
@@ -13,7 +14,6 @@ import type { Moment } from './work.ts'
 /** Exceptions are shown to a veterinarian for so long; the record of the dose keeps them for ever. */
 const exceptionsShownHours = 72
 const secondsShownHours = 48
-const minutesPerHour = 60
 
 export interface GatheredDoses {
   items: TodayWork[]
@@ -107,10 +107,8 @@ function recordedItems(row: RecentDoseRow, moment: Moment, mayStop: boolean): To
   const startedAt = row.happened_at.toISOString()
   const wasGiven = wentIn(row)
   const items: TodayWork[] = []
-  const isTimed = row.contact_minutes !== null || !row.contact_is_told
-  if (isTimed && wasGiven && row.stop_at === null) {
-    const endsAt =
-      row.contact_minutes === null ? null : addHours(startedAt, row.contact_minutes / minutesPerHour)
+  const endsAt = endOfBath(row)
+  if (endsAt !== undefined && wasGiven && row.stop_at === null) {
     items.push(
       work({
         id: `bath-running:${row.id}`,
