@@ -172,6 +172,7 @@ export const observationForms = defineMessages({
   strikeQuestion: (p: { enclosure: string }) => `Strike out what was seen at ${p.enclosure}?`,
   strikeHint:
     'It stays readable, with your reason. Bodies without a name that it found are waited for no longer. A count that it gave, and deaths of named animals, stay: correct those at the animal.',
+  strikeBack: 'Back',
   observationStruck: 'Struck out',
   nameBodies: 'Name the bodies',
   bodiesQuestion: (p: { enclosure: string }) => `Whose bodies were those in ${p.enclosure}?`,

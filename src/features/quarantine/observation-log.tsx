@@ -6,23 +6,25 @@ import type { Observation } from '../../../shared/contracts/observations.contrac
 import { daysBetween, wallClockOf } from '../../../shared/domain/time/facility-date.ts'
 import { noticeStateWords } from '../../../shared/messages/notices.ts'
 import { sayObservation } from '../../../shared/messages/observations.ts'
-import { observationForms } from '../../../shared/messages/quarantine-forms.ts'
+import { caseForms, observationForms } from '../../../shared/messages/quarantine-forms.ts'
 import { quarantineWords as words } from '../../../shared/messages/quarantine-screens.ts'
 import { sayTime } from '../../../shared/messages/say-date.ts'
 import { useFacilityNow } from '../../lib/facility-time.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
+import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { longDay } from '../../ui/day-words.ts'
 import { LogColumn } from '../../ui/log-column.tsx'
 import type { LogEntry } from '../../ui/log-column.tsx'
+import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { Tag } from '../../ui/tag.tsx'
+import { useToast } from '../../ui/toast-context.ts'
 import { BodiesDialog } from './bodies-dialog.tsx'
-import { useReviewObservation } from './mutations.ts'
+import { useReviewObservation, useStrikeObservation } from './mutations.ts'
 import { observationsQuery } from './queries.ts'
-import { StrikeObservationDialog } from './strike-observation-dialog.tsx'
 
 /** What was seen, the newest first: of one case, or of all with their numbers. A veterinarian notes here that they read it. */
 export function ObservationLog({
@@ -194,7 +196,29 @@ function Strike({ row, zone }: { row: Observation; zone: string }) {
         {observationForms.strikeOut}
         <span className="visually-hidden"> {sayMoment(row.happenedAt, zone, new Date().toISOString())}</span>
       </button>
-      {asked ? <StrikeObservationDialog observation={row} onBack={() => setAsked(false)} /> : null}
+      {asked ? <StrikeQuestion row={row} onBack={() => setAsked(false)} /> : null}
     </>
+  )
+}
+
+/** Says beforehand what of the observation stays. */
+function StrikeQuestion({ row, onBack }: { row: Observation; onBack: () => void }) {
+  const strike = useStrikeObservation(row.id)
+  const say = useToast()
+  const [key] = useState(newId)
+  return (
+    <ReasonDialog
+      question={observationForms.strikeQuestion({ enclosure: row.enclosure })}
+      body={`${sayObservation(row).join('. ')}. ${observationForms.strikeHint}`}
+      label={caseForms.reason}
+      act={observationForms.strikeOut}
+      back={observationForms.strikeBack}
+      onBack={onBack}
+      onAct={async (reason) => {
+        await strike.mutateAsync({ reason, key })
+        onBack()
+        say({ words: observationForms.observationStruck })
+      }}
+    />
   )
 }
