@@ -12,6 +12,7 @@ import { Tag } from '../../ui/tag.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { DoseText } from '../orders/index.ts'
 import { useStrikeRecord } from './mutations.ts'
+import { isNotToCome } from './sheet-model.ts'
 
 const kindWords = (kind: RecordedDose['kind']) =>
   ({
@@ -22,7 +23,7 @@ const kindWords = (kind: RecordedDose['kind']) =>
   })[kind]
 
 /** Amounts of what was recorded are left out for whoever may calculate another dose. */
-const isLeftOut = ({ blind, state }: BathSheet) => blind && ['running', 'done', 'ended'].includes(state)
+const isLeftOut = (sheet: BathSheet) => sheet.blind && isNotToCome(sheet)
 
 /** Everything recorded of this dose: what, when, by whom, how it ended, and what a veterinarian has to look at. */
 export function RecordedDoses({ sheet, zone }: { sheet: BathSheet; zone: string }) {

@@ -1,6 +1,10 @@
 import type { BathSheet, RecordedDose, RunningBath } from '../../../shared/contracts/doses.contract.ts'
 import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 
+/** Whether the dose is recorded, or not to be given any more. */
+export const isNotToCome = ({ state }: Pick<BathSheet, 'state'>): boolean =>
+  state === 'running' || state === 'done' || state === 'ended'
+
 /** Which part of the sheet somebody came for, from the address. */
 export type SheetPart = 'second' | 'whole' | null
 
@@ -19,8 +23,8 @@ export function sheetMode(blind: BathSheet, part: SheetPart): 'blind' | 'whole' 
     if (blind.first === null) return 'same'
     if (blind.secondShut === null || blind.secondShut === 'begin-again') return 'blind'
   }
-  // what is recorded, or not to be given any more, needs no amount to be looked at, or to be stopped
-  if (part !== 'whole' && ['running', 'done', 'ended'].includes(blind.state)) return 'same'
+  // it needs no amount to be looked at, or to be stopped
+  if (part !== 'whole' && isNotToCome(blind)) return 'same'
   return 'whole'
 }
 
