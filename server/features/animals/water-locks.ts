@@ -71,7 +71,7 @@ export function createWaterLocks(parts: { water: WaterQuestions }) {
       const cleared = animalId !== null && (await animals.wasClearedHere(tx, animalId, at))
       const known = new Set(then.map(({ id }) => id))
       const now = at < tx.at ? await readLocks(tx.manager, [...self, ...left, ...there], tx.at) : []
-      const met = cleared || animalId === null ? [] : await metOnArrival(tx, animalId, at)
+      const met = animalId === null ? [] : await metOnArrival(tx, animalId, at)
       return {
         own: on(self),
         leaves: [...on(left).filter(({ kind }) => kind === 'all' || !cleared), ...met],
