@@ -17,9 +17,6 @@ beforeEach(async () => {
 })
 afterAll(() => api.stop())
 
-const blindSheet = async (number: string, by: TestPerson) =>
-  (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
-
 describe('the amount of a dose whose record a strike would open again', () => {
   it('is kept from a second person, who is remembered when they look all the same', async () => {
     const number = await house.signedBath(bath)
@@ -39,7 +36,7 @@ describe('the amount of a dose whose record a strike would open again', () => {
     expect(withheld.body).toMatchObject({ blind: true, state: 'done' })
     const isOfIt = (one: { params: object }) => Object.values(one.params).includes(number)
     const seenBy = async (by: TestPerson) => [
-      sent(await blindSheet(number, by)),
+      sent(await house.blindSheet(number, by)),
       sent((await by.agent.get(url).expect(200)).body),
       sent((await by.agent.get(`/api/orders?q=${number}`).expect(200)).body),
       (await by.agent.get(`/api/orders.csv?q=${number}`).expect(200)).text,
@@ -63,7 +60,7 @@ describe('the amount of a dose whose record a strike would open again', () => {
     expect(sent(struck.body)).not.toMatch(shows)
     await house.calculateFirst(number).expect(201)
     for (const by of [keeper, other]) {
-      expect((await blindSheet(number, by)).secondShut).toBe('amount-seen')
+      expect((await house.blindSheet(number, by)).secondShut).toBe('amount-seen')
       expect((await house.calculateSecond(bath, number, {}, by)).body.code).toBe('another-person-needed')
     }
     await house.calculateSecond(bath, number).expect(201)

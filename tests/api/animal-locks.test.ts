@@ -39,6 +39,10 @@ const lock = (animalId: string, kind: 'boundary' | 'all', caseId = api.nextId())
       at: locked,
     }),
   ).then(() => caseId)
+const clear = (sourceId: string) =>
+  inTx((tx) =>
+    api.composition.animals.service.liftMovement(tx, { sourceId, reason: 'cleared', at: nextTime() }),
+  )
 const move = async (role: Role, url: string, from: TestPlace, to: TestPlace, body: object = {}) =>
   (await api.as(role)).agent.post(`${url}/moves`).send({
     id: api.nextId(),
@@ -63,13 +67,7 @@ describe('quarantine locks', () => {
       documentedTransfer: 'to the sea hall, same clock, own net',
     })
     expect(transfer.status).toBe(201)
-    await inTx((tx) =>
-      api.composition.animals.service.liftMovement(tx, {
-        sourceId: caseId,
-        reason: 'cleared',
-        at: nextTime(),
-      }),
-    )
+    await clear(caseId)
     expect((await move('keeper', ray.url, hall, wing1)).status).toBe(201)
     expect((await move('keeper', ray.url, wing1, hall)).status).toBe(201)
   })
@@ -80,13 +78,7 @@ describe('quarantine locks', () => {
     const id = await lock(quarantined.id, 'boundary')
     const happenedAt = '2026-11-20T14:00:00Z'
     const newcomer = await anAnimal(api, { taxonId, enclosureId: ward.id, happenedAt })
-    await inTx((tx) =>
-      api.composition.animals.service.liftMovement(tx, {
-        sourceId: id,
-        reason: 'cleared',
-        at: nextTime(),
-      }),
-    )
+    await clear(id)
     expect((await move('keeper', quarantined.url, ward, hall)).status).toBe(201)
     expect((await move('keeper', newcomer.url, ward, wing2)).status).toBe(201)
     const reply = await move('keeper', newcomer.url, wing2, hall)

@@ -28,8 +28,6 @@ const aBathToCalculate = async () => {
 }
 const pdfText = async (by: TestPerson, path: string) =>
   textOf(await fetchPdf(by, path)).replaceAll(/\s+/g, ' ')
-const blindSheet = async (number: string, by: TestPerson) =>
-  (await by.agent.get(`${house.doseAt(number)}?blind=yes`).expect(200)).body
 
 describe('a second calculation is blind', () => {
   it(
@@ -39,12 +37,12 @@ describe('a second calculation is blind', () => {
       const keeper = await api.as('keeper')
       const veterinarian = await api.as('veterinarian')
       const number = await aBathToCalculate()
-      expect((await blindSheet(number, keeper)).secondShut).toBeNull()
+      expect((await house.blindSheet(number, keeper)).secondShut).toBeNull()
 
       // the whole sheet, and then back as if nothing had been seen
       const whole = await keeper.agent.get(house.doseAt(number)).expect(200)
       expect(whole.body.amountNow).toEqual({ value: '218', unit: 'mL' })
-      expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+      expect((await house.blindSheet(number, keeper)).secondShut).toBe('amount-seen')
       const seen = await house.calculateSecond(bath, number, {}, keeper)
       expect([seen.status, seen.body.code]).toEqual([403, 'another-person-needed'])
       expect(seen.body.detail).toContain('You have been shown the amount')
@@ -66,7 +64,7 @@ describe('a second calculation is blind', () => {
 
       // whoever saw nothing still may; once the two agree the amount is there for everybody
       await house.calculateSecond(bath, number).expect(201)
-      expect((await blindSheet(number, await api.as('keeper'))).amountNow).toEqual({
+      expect((await house.blindSheet(number, await api.as('keeper'))).amountNow).toEqual({
         value: '218',
         unit: 'mL',
       })
@@ -85,7 +83,7 @@ describe('a second calculation is blind', () => {
       expect(sent(shown)).not.toMatch(shows)
       expect(sent((await by.agent.get(`/api/orders?q=${number}`)).body)).not.toMatch(shows)
       expect((await by.agent.get(`/api/orders.csv?q=${number}`)).text).not.toMatch(shows)
-      expect(sent(await blindSheet(number, by))).not.toMatch(shows)
+      expect(sent(await house.blindSheet(number, by))).not.toMatch(shows)
     }
     // whoever signed it has seen it, and is no second person
     const signer = (await (await api.as('veterinarian')).agent.get(url).expect(200)).body
@@ -98,7 +96,7 @@ describe('a second calculation is blind', () => {
     await house.calculateFirst(number).expect(201)
     const asked = (await house.second.agent.get(`${url}?amounts=yes`).expect(200)).body
     expect(asked).toMatchObject({ amountsWithheld: false, amountText: '218\u00a0mL' })
-    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, house.second)).secondShut).toBe('amount-seen')
     expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
     expect((await house.second.agent.get(url).expect(200)).body.amountsWithheld).toBe(false)
     // typing amounts at the tank is no way to find the right one: the answer is the same for each
@@ -112,7 +110,7 @@ describe('a second calculation is blind', () => {
     // paper shows it too
     const keeper = await api.as('keeper')
     await keeper.agent.get(`${url}/print`).expect(200)
-    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, keeper)).secondShut).toBe('amount-seen')
   })
 
   it('also after a record of the dose was struck out, and under a version of the order that was amended since', async () => {
@@ -124,10 +122,10 @@ describe('a second calculation is blind', () => {
       .set('Idempotency-Key', newKey())
       .send({ reason: 'the other tank was meant' })
       .expect(200)
-    expect((await blindSheet(number, house.technician)).recorded).toMatchObject([
+    expect((await house.blindSheet(number, house.technician)).recorded).toMatchObject([
       { amountText: '218\u00a0mL' },
     ])
-    const blind = await blindSheet(number, keeper)
+    const blind = await house.blindSheet(number, keeper)
     expect(blind).toMatchObject({
       blind: true,
       secondShut: null,
@@ -135,12 +133,12 @@ describe('a second calculation is blind', () => {
     })
     expect(JSON.stringify(blind)).not.toMatch(/218/)
     await keeper.agent.get(house.doseAt(number)).expect(200)
-    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, keeper)).secondShut).toBe('amount-seen')
 
     await house.amend(bath, number, { target: { value: '90', unit: 'uL/L' } })
     await house.calculateFirst(number).expect(201)
-    expect((await blindSheet(number, keeper)).secondShut).toBe('amount-seen')
-    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    expect((await house.blindSheet(number, keeper)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, house.second)).secondShut).toBeNull()
     expect((await keeper.agent.get(`/api/orders/${number}`).expect(200)).body.amountsWithheld).toBe(false)
   })
 
@@ -158,7 +156,7 @@ describe('a second calculation is blind', () => {
         .secondShut
 
     // neither the sheet of the bath that runs, nor the reply to stopping it, nor the worklist names it
-    const running = await blindSheet(number, keeper)
+    const running = await house.blindSheet(number, keeper)
     expect(running).toMatchObject({ blind: true, state: 'running', recorded: [{ amountText: null }] })
     expect(sent(running)).not.toMatch(shows)
     const today = async (by: TestPerson) => {
@@ -204,9 +202,9 @@ describe('a second calculation is blind', () => {
         .amount
     expect(await preview(other)).not.toBeNull()
     expect(await preview(own, { target: null })).toBeNull()
-    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    expect((await house.blindSheet(number, house.second)).secondShut).toBeNull()
     expect(await preview(own)).toMatchObject({ measured: bathAmount })
-    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, house.second)).secondShut).toBe('amount-seen')
     expect((await house.calculateSecond(own, number)).body.code).toBe('another-person-needed')
   })
 
@@ -218,16 +216,16 @@ describe('a second calculation is blind', () => {
     expect(look.body.amount).toMatchObject({ measured: bathAmount })
     const number = await house.signedBath(own)
     await house.calculateFirst(number).expect(201)
-    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, house.second)).secondShut).toBe('amount-seen')
     expect((await house.calculateSecond(own, number)).body.code).toBe('another-person-needed')
-    expect((await blindSheet(number, keeper)).secondShut).toBeNull()
+    expect((await house.blindSheet(number, keeper)).secondShut).toBeNull()
   })
 
   it('nor by whoever began to write the order that another signed', async () => {
     await house.freshWater(bath)
     const number = await house.signedBath(bath, {}, house.second)
     await house.calculateFirst(number).expect(201)
-    expect((await blindSheet(number, house.second)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, house.second)).secondShut).toBe('amount-seen')
     expect((await house.calculateSecond(bath, number)).body.code).toBe('another-person-needed')
     const keeper = await api.as('keeper')
     await house.calculateSecond(bath, number, {}, keeper).expect(201)
@@ -254,7 +252,7 @@ describe('a second calculation is blind', () => {
     const signer = await api.as('veterinarian')
     for (const by of [signer, house.technician])
       expect(await entry(by)).toMatchObject({ amountLeftOut: false, after: { amount: bathAmount } })
-    expect((await blindSheet(number, other)).secondShut).toBeNull()
+    expect((await house.blindSheet(number, other)).secondShut).toBeNull()
     await house.calculateSecond(bath, number, {}, other).expect(201)
     await house.give(number).expect(201)
     expect(await entry(other)).toMatchObject({ amountLeftOut: false, after: { amount: bathAmount } })
@@ -263,7 +261,7 @@ describe('a second calculation is blind', () => {
   it('nor by whoever signed the order, who has seen what they signed', async () => {
     const number = await aBathToCalculate()
     const signer = await api.as('veterinarian')
-    expect((await blindSheet(number, signer)).secondShut).toBe('amount-seen')
+    expect((await house.blindSheet(number, signer)).secondShut).toBe('amount-seen')
     const own = await house.calculateSecond(bath, number, {}, signer)
     expect([own.status, own.body.code]).toEqual([403, 'another-person-needed'])
     expect(own.body.detail).toContain('or signed the order')
@@ -296,7 +294,7 @@ describe('a second calculation is blind', () => {
     expect(right.body.detail).toContain('The first is worked out anew')
     api.clock.set(new Date(testDay.getTime() + 60_000))
     await house.calculateFirst(number).expect(201)
-    expect((await blindSheet(number, house.second)).secondShut).toBeNull()
+    expect((await house.blindSheet(number, house.second)).secondShut).toBeNull()
     await house.calculateSecond(bath, number).expect(201)
     await house.give(number).expect(201)
   })
@@ -307,10 +305,10 @@ describe('a second calculation is blind', () => {
     const after = (minutes: number) => api.clock.set(new Date(testDay.getTime() + minutes * 60_000))
     const unsaid = await repeat()
     expect([unsaid.status, unsaid.body.code]).toEqual([403, 'another-person-needed'])
-    expect((await blindSheet(number, house.technician)).repeatAt).toBe(
+    expect((await house.blindSheet(number, house.technician)).repeatAt).toBe(
       new Date(testDay.getTime() + 5 * 60_000).toISOString(),
     )
-    expect((await blindSheet(number, house.second)).repeatAt).toBeNull()
+    expect((await house.blindSheet(number, house.second)).repeatAt).toBeNull()
     after(4.9)
     const early = await repeat({ nobodyReached: true })
     expect([early.status, early.body.code]).toEqual([403, 'another-person-needed'])

@@ -4,7 +4,7 @@ import { verifyOrders } from '../../server/features/orders/index.ts'
 import { verifySignedEvents } from '../../server/features/quarantine/index.ts'
 import { verifyRows } from '../../server/platform/audit/verify-rows.ts'
 import { aFormalinHouse } from '../builders/a-bath.ts'
-import type { FormalinHouse } from '../builders/a-bath.ts'
+import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
 import { aClearableCase, clear } from '../builders/a-clearance.ts'
 import { aDraft, aProduct, signDraft } from '../builders/an-order.ts'
 import { textOf } from '../pdf/support/poppler.ts'
@@ -152,6 +152,19 @@ describe('an order of which a signature is missing', () => {
   })
 })
 
+/** An order being written for 2 mg/L of a powder of its own. */
+const aPowderBath = (bath: BathTank, product: { id: string; lotId: string }) =>
+  aDraft(
+    api,
+    house.fieldsOf(bath, {
+      productId: product.id,
+      lotId: product.lotId,
+      target: { value: '2', unit: 'mg/L' },
+      basis: 'active',
+      division: { value: '0.01', unit: 'g' },
+    }),
+  )
+
 describe('a kept row that another hand changed', () => {
   const found = async (what: string, at: string) =>
     (await rowFaults()).filter((fault) => fault.what === what && fault.at.startsWith(at))
@@ -205,16 +218,7 @@ describe('a kept row that another hand changed', () => {
   it('is reported of what a dose is worked out from: a product, an enclosure, a draft; no later act hides it', async () => {
     const bath = await house.tankWithSchool()
     const product = await aProduct(api, {})
-    const draft = await aDraft(
-      api,
-      house.fieldsOf(bath, {
-        productId: product.id,
-        lotId: product.lotId,
-        target: { value: '2', unit: 'mg/L' },
-        basis: 'active',
-        division: { value: '0.01', unit: 'g' },
-      }),
-    )
+    const draft = await aPowderBath(bath, product)
     const { agent } = house.technician
     const listed = async () => {
       const { products } = (await agent.get('/api/formulary').expect(200)).body
@@ -304,16 +308,7 @@ describe('a kept row that another hand changed', () => {
   it('is no lot to sign a dose by when its recall was taken away', async () => {
     const bath = await house.tankWithSchool()
     const product = await aProduct(api, {})
-    const draft = await aDraft(
-      api,
-      house.fieldsOf(bath, {
-        productId: product.id,
-        lotId: product.lotId,
-        target: { value: '2', unit: 'mg/L' },
-        basis: 'active',
-        division: { value: '0.01', unit: 'g' },
-      }),
-    )
+    const draft = await aPowderBath(bath, product)
     const vet = await api.as('veterinarian')
     const recall = api.nextId()
     await vet.agent

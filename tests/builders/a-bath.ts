@@ -47,6 +47,9 @@ export async function aFormalinHouse(api: TestApi) {
       startsAt: '2026-12-01T18:20:00Z',
       ...given,
     })
+  /** The sheet as whoever may be the second person first gets it. */
+  const blindSheet = async (number: string, by: TestPerson) =>
+    (await by.agent.get(`${doseAt(number)}?blind=yes`).expect(200)).body
   /** A signed bath of 45 min at 100 µL/L for the school of a tank, due now. */
   async function signedBath(bath: BathTank, given: object = {}, begunBy?: TestPerson): Promise<string> {
     const draft = await aDraft(api, fieldsOf(bath, given), begunBy)
@@ -105,6 +108,7 @@ export async function aFormalinHouse(api: TestApi) {
     doseAt,
     tankWithSchool,
     fieldsOf,
+    blindSheet,
     signedBath,
     amend,
     freshWater,
