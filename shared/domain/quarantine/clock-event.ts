@@ -99,7 +99,7 @@ export type ClockEventBody =
   | { kind: 'cleared' }
   /** The whole batch left for another quarantine (K05). */
   | { kind: 'transferred-out' }
-  /** As if the other event had never been (K16). */
+  /** As if the other event had never been (K16). A void cannot itself be voided: the event is entered again. */
   | { kind: 'voided'; voidsEventId: string }
 
 export type ClockEventKind = ClockEventBody['kind']

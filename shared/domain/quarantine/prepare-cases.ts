@@ -71,9 +71,11 @@ export function prepareCases(question: ClockQuestion): Result<PreparedCase[], Cl
     }
     byId.set(eventId, event)
   }
-  for (const event of byId.values()) if (event.kind === 'voided') byId.delete(event.voidsEventId)
+  // Voids themselves cannot be voided, so that it does not matter which of two is read first.
+  const voidedIds = new Set(eventsOf([...byId.values()], 'voided').map(({ voidsEventId }) => voidsEventId))
   const live = [...byId.values()]
-    .filter((event) => event.kind !== 'voided' && instantToMs(event.at) <= instantToMs(asOf))
+    .filter(({ eventId, kind }) => kind !== 'voided' && !voidedIds.has(eventId))
+    .filter(({ at }) => instantToMs(at) <= instantToMs(asOf))
     .sort(inClockOrder)
 
   const prepared: PreparedCase[] = []

@@ -149,6 +149,19 @@ describe('laws of the clock', () => {
       { numRuns: 120 },
     )
   })
+  it('a void holds although another void names it, whichever was entered first', () => {
+    const signs = event('2026-03-01', { kind: 'clinical-signs' }, { eventId: 'e1' })
+    const itsVoid = event('2026-03-01', { kind: 'voided', voidsEventId: 'e1' }, { eventId: 'e2' })
+    const voidOfVoid = event('2026-03-01', { kind: 'voided', voidsEventId: 'e2' }, { eventId: 'e3' })
+    const read = (events: ClockEvent[]) => clock({ events, asOf: '2026-03-21' })
+    expect(read([signs]).extensions).toHaveLength(1)
+    for (const events of [
+      [signs, itsVoid, voidOfVoid],
+      [voidOfVoid, signs, itsVoid],
+      [voidOfVoid, itsVoid, signs],
+    ])
+      expect(read(events).extensions).toEqual([])
+  })
   it('voiding an event is never having had it', () => {
     fc.assert(
       fc.property(aHistory, fc.nat(40), (asked, pick) => {
