@@ -111,6 +111,12 @@ function listen(page: Page): string[] {
   return heard
 }
 
+/** What could tell an amount: ids and instants hold digits of their own by chance. */
+const withoutIdsAndInstants = (text: string) =>
+  text
+    .replaceAll(/[\da-f]{8}(-[\da-f]{4}){3}-[\da-f]{12}/gi, 'an-id')
+    .replaceAll(/\d{4}-\d\d-\d\dT[\d:.]+Z/g, 'an-instant')
+
 /** The sheet of the first dose as the server has it. */
 const asTheServerHasIt = async (number: string) =>
   (await (await app.as('veterinarian')).agent.get(`/api/orders/${number}/doses/1`).expect(200)).body
@@ -188,7 +194,10 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await expectSound(other, 'bath-second-differs')
     await other.getByText('Both begin again', { exact: true }).waitFor()
     expect(await amountField.count()).toBe(0)
-    const seen = `${heard.join(' ')} ${await other.content()}`.replaceAll('2,180', '').replaceAll('2180', '')
+    const theirs = `${heard.join(' ')} ${await other.content()}`
+      .replaceAll('2,180', '')
+      .replaceAll('2180', '')
+    const seen = withoutIdsAndInstants(theirs)
     expect(heard.length).toBeGreaterThan(2)
     expect(seen).not.toMatch(/218|PZ-0317/)
 
