@@ -1,5 +1,5 @@
-import { useState } from 'react'
-import { useSearchParams } from 'react-router-dom'
+import { startTransition, useOptimistic, useState } from 'react'
+import { useNavigate, useSearchParams } from 'react-router-dom'
 
 /** What a list is searched, filtered and sorted by, as it stands in the address. */
 export interface ListState {
@@ -29,20 +29,22 @@ const notFilters = ['sort', 'direction', 'cursor', 'from']
  * Cursors are opaque; the pages that were passed are remembered, and a page opened by its link leads back to the first.
  */
 export function useListState(): ListState {
-  const [search, setSearch] = useSearchParams()
+  const [inAddress] = useSearchParams()
+  // The address follows when the router has got there; until then what was asked for counts, so that a box stays ticked.
+  const [search, setSearch] = useOptimistic(inAddress)
+  const navigate = useNavigate()
   const [passed, setPassed] = useState<{ cursor: string | null; from: number }[]>([])
-  const change = (changes: Readonly<Record<string, string | undefined>>) =>
-    setSearch(
-      (old) => {
-        const next = new URLSearchParams(old)
-        for (const [name, value] of Object.entries(changes)) {
-          if (value) next.set(name, value)
-          else next.delete(name)
-        }
-        return next
-      },
-      { replace: true },
-    )
+  const change = (changes: Readonly<Record<string, string | undefined>>) => {
+    const next = new URLSearchParams(search)
+    for (const [name, value] of Object.entries(changes)) {
+      if (value) next.set(name, value)
+      else next.delete(name)
+    }
+    startTransition(async () => {
+      setSearch(next)
+      await navigate(`?${next}`, { replace: true })
+    })
+  }
   const cursor = search.get('cursor') ?? undefined
   const from = Number(search.get('from') ?? '1') || 1
   const narrowedBy = [...new Set(search.keys())].filter((name) => !notFilters.includes(name))

@@ -85,7 +85,13 @@ describe.each([
     await row.waitFor({ state: 'detached' })
     // on a phone the filters are folded away above the rows
     if (size === phone) await page.getByText('Filters', { exact: true }).click()
-    await page.getByRole('checkbox', { name: 'Show those struck through' }).check()
+    // ticked in the very event of the click: it does not wait until the list has been read again
+    const box = page.getByRole('checkbox', { name: 'Show those struck through' })
+    const isTickedAtOnce = await box.evaluate((input: HTMLInputElement) => {
+      input.click()
+      return input.checked
+    })
+    expect(isTickedAtOnce).toBe(true)
     await page.getByText('Filters, 1 in use').waitFor()
     await page.getByText(/another tank/).waitFor()
     await expectSound(page, 'list of readings')
