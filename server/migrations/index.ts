@@ -28,6 +28,7 @@ import { CalculationsAgreed1764600000042 } from './0042-calculations-agreed.ts'
 import { OrdersAlikeByWater1764600000043 } from './0043-orders-alike-by-water.ts'
 import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
+import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -62,4 +63,5 @@ export const migrations = [
   OrdersAlikeByWater1764600000043,
   ContactsOfDoses1764600000044,
   BodiesNamedAgain1764600000045,
+  ContactsNeedAnEnd1764600000050,
 ]

@@ -29,11 +29,16 @@ export interface RecentDoseRow {
 /** Doses that happened or were entered since an instant, and every bath that has not ended, in time order. */
 export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
   return db.query(
-    `SELECT d.id, o.number, d.dose_key, d.kind, v.agent, c.code AS enclosure_code, d.amount_entered_value,
+    `WITH live AS (
+       SELECT d.*, d.happened_at >= $1 OR d.recorded_at >= $1 AS is_recent,
+              d.kind IN ('given', 'recorded')
+                AND NOT EXISTS (SELECT 1 FROM live_bath_stops b WHERE b.dose_id = d.id) AS has_no_end
+         FROM live_doses d)
+     SELECT d.id, o.number, d.dose_key, d.kind, v.agent, c.code AS enclosure_code, d.amount_entered_value,
             d.amount_entered_unit, row_is_as_written('doses', d.id::text) AS is_as_written, l.contact_minutes, l.is_told AS contact_is_told, d.exceptions_text <> '[]' AS has_exceptions, d.happened_at,
             d.recorded_at, p.printed_name AS by_name, s.happened_at AS stop_at, s.cause AS stop_cause,
             s.seen AS stop_seen, q.printed_name AS stop_by
-       FROM live_doses d
+       FROM live d
        JOIN contacts_of_doses l ON l.dose_id = d.id
        JOIN orders_of_doses w ON w.dose_id = d.id
        JOIN orders o ON o.id = w.order_id
@@ -42,8 +47,7 @@ export function readRecentDoses(db: Db, since: Date): Promise<RecentDoseRow[]> {
        JOIN people p ON p.id = d.recorded_by
        LEFT JOIN LATERAL (SELECT * FROM live_bath_stops b WHERE b.dose_id = d.id ORDER BY ${latestFirst} LIMIT 1) s ON true
        LEFT JOIN people q ON q.id = s.recorded_by
-      WHERE d.happened_at >= $1 OR d.recorded_at >= $1
-         OR (d.kind IN ('given', 'recorded') AND s.id IS NULL AND (l.contact_minutes IS NOT NULL OR NOT l.is_told))
+      WHERE (d.is_recent OR d.has_no_end) AND (d.is_recent OR l.needs_an_end)
       ORDER BY d.happened_at, d.id`,
     [since],
   )

@@ -80,7 +80,7 @@ const columns = `
   EXISTS (SELECT 1 FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id JOIN contacts_of_doses l ON l.dose_id = d.id
            WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')
              AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)
-             AND (l.contact_minutes IS NOT NULL OR NOT l.is_told)) AS running,
+             AND l.needs_an_end) AS running,
   CASE WHEN v.id IS NULL THEN NULL ELSE ${copiesColumn} END AS copies,
   ${chainColumn} AS chain`
 
