@@ -1,6 +1,7 @@
 import pg from 'pg'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
 import type { CaseDetail } from '../../shared/contracts/quarantine.contract.ts'
+import type { CaseStepView } from '../../shared/contracts/quarantine-primitives.ts'
 import { aCase } from '../builders/a-case.ts'
 import { aClearableCase, clear } from '../builders/a-clearance.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
@@ -99,6 +100,9 @@ describe('a clearance', () => {
       },
     })
     expect(signed.body.reasons.at(-1)).toMatchObject({ code: 'cleared' })
+    const steps: CaseStepView[] = signed.body.legs.at(-1).steps
+    expect(steps.filter(({ state }) => state !== 'done' && state !== 'failed')).toEqual([])
+    expect(steps.find(({ kind }) => kind === 'decide')).toMatchObject({ state: 'done', doneOn: '2026-12-01' })
     const { agent } = await api.as('keeper')
     expect((await agent.get(`/api/animals/${one.animal.accession}`)).body.lock).toBe('none')
     const actions = await auditOf(one)

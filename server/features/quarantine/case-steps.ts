@@ -1,3 +1,4 @@
+import { addDays } from '../../../shared/domain/time/facility-date.ts'
 import { listCaseSteps } from '../../../shared/domain/protocol/list-case-steps.ts'
 import type { CaseStep } from '../../../shared/domain/protocol/list-case-steps.ts'
 import type {
@@ -42,16 +43,9 @@ function presentStep(step: CaseStep, records: readonly StepRecordReadRow[]): Cas
   }
 }
 
-const decisionDone = (steps: CaseStepView[], endedOn: string | null) =>
-  steps.map((step): CaseStepView =>
-    step.kind === 'decide' && endedOn !== null && step.state !== 'done'
-      ? { ...step, state: 'done', doneOn: endedOn, lateDays: 0 }
-      : step,
-  )
-
 /**
- * The legs of a case with their steps. The clearance is the decision, so nobody records that step by hand; after the
- * end of a case nothing is due or late any more.
+ * The legs of a case with their steps. The clearance is the decision, so nobody records that step by hand; the last leg
+ * ends with the day on which the case ended, and like on any leg that has ended nothing is due or late any more.
  */
 export function presentLegs(
   facts: ClockFacts,
@@ -67,16 +61,24 @@ export function presentLegs(
     .filter((row) => row.case_id === head.id && row.happened_at <= facts.asOf)
     .map((row) => row.happened_on)
   const { steps } = protocolContentOf(facts, head)
+  const decided = steps.flatMap(({ key, kind }) =>
+    kind === 'decide' && endedOn !== null
+      ? [{ recordId: head.id, stepKey: key, outcome: 'done' as const, on: endedOn }]
+      : [],
+  )
   return legs.map((leg): LegView => {
     const listed = listCaseSteps(
       steps,
-      { day0On: leg.day0On, untilOn: leg.endedOn },
-      records.map((row) => ({
-        recordId: row.id,
-        stepKey: row.step_key,
-        outcome: row.outcome,
-        on: row.happened_on,
-      })),
+      { day0On: leg.day0On, untilOn: leg.endedOn ?? (endedOn === null ? null : addDays(endedOn, 1)) },
+      [
+        ...records.map((row) => ({
+          recordId: row.id,
+          stepKey: row.step_key,
+          outcome: row.outcome,
+          on: row.happened_on,
+        })),
+        ...decided,
+      ],
       lookedAtOn,
       asOfOn,
     ).map((step) => presentStep(step, records))
@@ -85,7 +87,7 @@ export function presentLegs(
       endedOn: leg.endedOn,
       daysRun: leg.daysRun,
       endReason: endReasonOf(leg, reasons),
-      steps: leg.endedOn === null ? decisionDone(listed, endedOn) : listed,
+      steps: listed,
     }
   })
 }

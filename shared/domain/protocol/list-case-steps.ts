@@ -28,7 +28,7 @@ export interface CaseStep {
   daily: { doneDays: number; passedDays: number; missedOn: FacilityDate[] } | null
 }
 
-/** The leg that the steps are dated by. `untilOn` is the day of the restart that ended it. */
+/** The leg that the steps are dated by. `untilOn` is the day of the restart that ended it, or the day after its case ended. */
 export interface LegDays {
   day0On: FacilityDate
   untilOn: FacilityDate | null
