@@ -32,6 +32,8 @@ export const caseWords = defineMessages({
   sharesWater: (p: { cases: string }) => `On the same water: ${p.cases}. They count and wait together.`,
   standsStill: (p: { at: string }) => `The clock stands still since ${p.at}.`,
   cleared: (p: { on: string }) => `Cleared ${p.on}`,
+  clearanceDisagrees:
+    'The record of this clearance no longer agrees with what was signed. Treat these animals as not cleared: keep them where they are, and tell the administrator, who can verify the records.',
   hold: 'Hold',
   lift: 'Lift',
   liftHold: 'Lift the hold',

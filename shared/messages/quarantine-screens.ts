@@ -66,6 +66,7 @@ export const quarantineWords = defineMessages({
   held: 'Held',
   locked: 'Locked',
   cleared: (p: { on: string }) => `Cleared ${p.on}`,
+  clearanceDisagrees: 'Clearance does not agree: not cleared',
   recalled: 'Recalled, not cleared',
   transferred: (p: { on: string }) => `Transferred ${p.on}`,
   batchOpen: 'In quarantine, batch still open',

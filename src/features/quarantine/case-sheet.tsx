@@ -34,7 +34,15 @@ import { HoldDialog, LiftDialog, LockDialog } from './hold-dialogs.tsx'
 import { ObservationLog } from './observation-log.tsx'
 import { OpenCalls } from './open-calls.tsx'
 import { OrdersHere } from './orders-here.tsx'
-import { animalsText, caseSpan, flagOfCase, hasEnded, passageOfCase, stateOfCase } from './passage-of-case.ts'
+import {
+  animalsText,
+  caseSpan,
+  clearanceDisagrees,
+  flagOfCase,
+  hasEnded,
+  passageOfCase,
+  stateOfCase,
+} from './passage-of-case.ts'
 import { ReportDialog } from './report-dialog.tsx'
 import { ResultDialog } from './result-dialog.tsx'
 import { StepDialog } from './step-dialog.tsx'
@@ -154,6 +162,11 @@ function CaseHead({
         </span>
       </div>
       <section className="case-clock" aria-label={words.clock}>
+        {clearanceDisagrees(detail) ? (
+          <p className="text-magenta t-strong" role="alert">
+            {words.clearanceDisagrees}
+          </p>
+        ) : null}
         {reason ? <h2 className="t-head">{sayReason(reason, detail.names, zone)}</h2> : null}
         {paused ? (
           <p className="t-strong">{words.standsStill({ at: sayMoment(paused.since, zone, detail.asOf) })}</p>
@@ -255,7 +268,7 @@ function Clearance({ of: detail }: { of: CaseDetail }) {
       <h2 id="case-clearance" className="t-head">
         {words.clearance}
       </h2>
-      <p>{words.cleared({ on: sayDate(clearance.on) })}</p>
+      {clearanceDisagrees(detail) ? null : <p>{words.cleared({ on: sayDate(clearance.on) })}</p>}
       {clearance.against > 0 ? (
         <p>{words.against({ count: clearance.against, reason: clearance.reason ?? '' })}</p>
       ) : null}

@@ -4,6 +4,7 @@ import type {
   ClockReasonView,
 } from '../../../shared/contracts/quarantine-primitives.ts'
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
+import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import { addDays, daysBetween } from '../../../shared/domain/time/facility-date.ts'
 import { clockNotes, quarantineWords as words } from '../../../shared/messages/quarantine-screens.ts'
 import { sayWhoCame } from '../../../shared/messages/say-who-came.ts'
@@ -17,15 +18,26 @@ type Names = CaseDetail['names']
 export const hasEnded = ({ status }: Pick<CaseRow, 'status'>): boolean =>
   status === 'cleared' || status === 'recalled' || status === 'transferred'
 
+/** A case, with what its page knows of the signature under its clearance. */
+type WithClearance<T> = T & {
+  clearance?: { signature: Pick<SignatureBlock, 'state'> } | null
+}
+
+/** Whether the clearance of a case is not what was signed, or nobody can tell: then nobody may rely on it. */
+export const clearanceDisagrees = ({ clearance }: WithClearance<object>): boolean =>
+  clearance != null && clearance.signature.state !== 'intact'
+
 /** The flag of a case; its words are {@link stateOfCase}. */
-export function flagOfCase(row: Pick<CaseRow, 'status' | 'held'>): Flag {
+export function flagOfCase(row: WithClearance<Pick<CaseRow, 'status' | 'held'>>): Flag {
+  if (row.status === 'cleared' && clearanceDisagrees(row)) return 'N'
   if (row.status === 'cleared' || row.status === 'transferred') return 'C'
   if (row.status === 'recalled') return 'N'
   return row.held || row.status === 'locked' ? 'L' : 'Q'
 }
 
 /** How a case stands, in the words beside its flag. */
-export function stateOfCase(row: Pick<CaseRow, 'status' | 'held' | 'endedOn'>): string {
+export function stateOfCase(row: WithClearance<Pick<CaseRow, 'status' | 'held' | 'endedOn'>>): string {
+  if (row.status === 'cleared' && clearanceDisagrees(row)) return words.clearanceDisagrees
   const on = row.endedOn === null ? '' : shortDay(row.endedOn)
   if (row.status === 'cleared') return words.cleared({ on })
   if (row.status === 'transferred') return words.transferred({ on })
@@ -41,11 +53,11 @@ export function animalsText({ low, high }: { low: number; high: number }): strin
 }
 
 /** Every case as a row of the board: what the drawing needs, from what the server says. */
-export function passageOfCase(row: CaseRow, names: Names, today: string): PassageView {
+export function passageOfCase(row: WithClearance<CaseRow>, names: Names, today: string): PassageView {
   const ended = hasEnded(row)
   const blocked = !ended && (row.held || row.status === 'locked')
   const harbourOn = ended ? row.endedOn : row.earliestClearanceOn
-  const allMet = row.status === 'cleared' || row.readyToClear
+  const allMet = (row.status === 'cleared' && !clearanceDisagrees(row)) || row.readyToClear
   return {
     id: row.id,
     number: row.number,

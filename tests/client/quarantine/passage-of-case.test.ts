@@ -153,6 +153,23 @@ describe('a case as a passage', () => {
     expect([flagOfCase(given), stateOfCase(given)]).toEqual([flag, words])
   })
 
+  it.each(['broken', 'unknown-key'] as const)('never says cleared where the clearance is %s', (state) => {
+    const given = {
+      ...row({ status: 'cleared', endedOn: '2026-05-25' }),
+      clearance: { signature: { state } },
+    }
+    expect([flagOfCase(given), stateOfCase(given)]).toEqual(['N', 'Clearance does not agree: not cleared'])
+    expect(passageOfCase(given, names, '2026-05-25')).toMatchObject({ flag: 'N', harbour: { allMet: false } })
+  })
+
+  it('says cleared where the clearance is what was signed', () => {
+    const given = {
+      ...row({ status: 'cleared', endedOn: '2026-05-25' }),
+      clearance: { signature: { state: 'intact' as const } },
+    }
+    expect(flagOfCase(given)).toBe('C')
+  })
+
   it('and the ruler holds every harbour, but not the whole past', () => {
     expect(boardSpan([view], '2026-05-14')).toEqual({ from: '2026-04-06', until: '2026-06-14' })
     expect(boardSpan([], '2026-05-14').from < '2026-05-01').toBe(true)
