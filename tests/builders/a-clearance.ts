@@ -1,7 +1,8 @@
-import { newKey, password } from '../support/api.ts'
+import { newKey, password, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 import { aCase } from './a-case.ts'
 import type { BuiltCase } from './a-case.ts'
+import { anEnclosure } from './a-water.ts'
 
 /** A case whose days have run and whose two samples were negative: nothing stands between it and clearance. */
 export async function aClearableCase(
@@ -41,4 +42,16 @@ export function clear(
     .post(`${one.url}/clearance`)
     .set('Idempotency-Key', key)
     .send({ password, expectedUnmet: [], ...change })
+}
+
+/** A keeper moves the animals of a case out of its boundary, into a hall. */
+export async function moveOut(api: TestApi, one: BuiltCase) {
+  const hall = await anEnclosure(api, `HALL-${one.number}`)
+  const { agent } = await api.as('keeper')
+  return agent.post(`/api/animals/${one.animal.accession}/moves`).send({
+    id: api.nextId(),
+    fromEnclosureId: one.enclosure.id,
+    toEnclosureId: hall.id,
+    happenedAt: testDay.toISOString(),
+  })
 }

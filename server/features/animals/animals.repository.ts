@@ -1,6 +1,7 @@
 import { updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Animal, AnimalDescription, Identifier, IdentifierEnd } from './animal.entity.ts'
+import { liftedByChangedClearance } from './changed-clearance.ts'
 
 /** Locks the heads of animals, in one order, until the transaction ends. */
 export async function lockAnimals(tx: Tx, ids: readonly string[]): Promise<Map<string, Animal>> {
@@ -111,7 +112,7 @@ export async function wasClearedHere(tx: Tx, animalId: string, at: Date): Promis
        JOIN movement_locks k ON k.animal_id = s.animal_id AND k.kind = 'boundary'
        JOIN movement_lock_lifts f ON f.lock_id = k.id
       WHERE s.animal_id = $1 AND s.during @> $2::timestamptz AND f.happened_at >= lower(s.during)
-        AND f.happened_at <= $2`,
+        AND f.happened_at <= $2 AND NOT ${liftedByChangedClearance('k')}`,
     [animalId, at],
   )
   return rows.length > 0
@@ -140,7 +141,8 @@ export async function findArrivalsInBoundary(
       WHERE NOT EXISTS (
         SELECT 1 FROM movement_locks k JOIN movement_lock_lifts f ON f.lock_id = k.id
          WHERE k.animal_id = $1 AND k.kind = 'boundary' AND f.happened_at <= $2
-           AND f.happened_at >= (SELECT min(first.since) FROM run first))`,
+           AND f.happened_at >= (SELECT min(first.since) FROM run first)
+           AND NOT ${liftedByChangedClearance('k')})`,
     [animalId, at],
   )
 }

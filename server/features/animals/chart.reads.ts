@@ -7,6 +7,7 @@ import type {
 } from '../../../shared/domain/animals/description.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { happenedBy } from '../../platform/database/happened-by.ts'
+import { liftedByChangedClearance } from './changed-clearance.ts'
 
 /** The times of a fact and its recorder's name, as every read here gives them. */
 export interface FactRow {
@@ -185,8 +186,9 @@ export function readLocks(db: Db, animalIds: readonly string[], at: Date): Promi
     `SELECT k.id, k.animal_id, k.kind, k.source_kind, k.source_id, k.source_label, k.reason, k.happened_at
        FROM movement_locks k
       WHERE k.animal_id = ANY ($1) AND ${happenedBy('k', '$2')}
-        AND NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
-                         WHERE f.lock_id = k.id AND ${happenedBy('f', '$2')})
+        AND (NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
+                          WHERE f.lock_id = k.id AND ${happenedBy('f', '$2')})
+             OR ${liftedByChangedClearance('k')})
       ORDER BY k.happened_at, k.id`,
     [animalIds, at],
   )
