@@ -104,6 +104,15 @@ describe('a printed order that is looked up', () => {
     expect(table).toMatch(/^ *2 .* g +g *$/m)
   })
 
+  it('says what the working comes to unrounded and what the balance makes of it', async () => {
+    const { number } = await aSigned()
+    const text = textOf(await printed(`/api/orders/${number}/print`)).replace(/\s+/g, ' ')
+    // 2,181.4 L × 2 mg/L = 4.3628 g, worked by hand
+    expect(text).toMatch(
+      /Unrounded 4\.36\d* g\. The balance or measure reads to 0\.01 g, so 4\.36 g is weighed/,
+    )
+  })
+
   it('comes out even where somebody wrote what the typeface lacks, spelled out', async () => {
     const { number } = await aSigned({ problem: 'Flukes 🐟 on mount' })
     expect(textOf(await printed(`/api/orders/${number}/print`))).toContain('Flukes [U+1F41F] on mount')

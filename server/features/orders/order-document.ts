@@ -14,6 +14,7 @@ import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
+import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
@@ -133,6 +134,22 @@ function workingBlock({ content }: OrderPaper): DocumentBlock {
     total: i === last,
   }))
   return { kind: 'working', lines }
+}
+
+const unroundedDigits = 8
+
+/** From the last line of the working to what is weighed, in the words of the screen. */
+function roundingBlock({ content: { amount, fields } }: OrderPaper): DocumentBlock[] {
+  if (!amount.measured || !fields.division) return []
+  const text = orderViewWords.rounded({
+    unrounded: formatDose(
+      Number(amount.unrounded.toPrecision(unroundedDigits)),
+      amount.unroundedUnit as UnitCode,
+    ).text,
+    division: formatDose(fields.division.value, fields.division.unit as UnitCode).text,
+    amount: amount.text,
+  })
+  return [{ kind: 'paragraph', text }]
 }
 
 function cautionBlocks({ content, block }: OrderPaper): DocumentBlock[] {
@@ -259,6 +276,7 @@ function statements(paper: OrderPaper): DocumentBlock[] {
     },
     { kind: 'heading', text: orderPaper.workingHeading },
     workingBlock(paper),
+    ...roundingBlock(paper),
     { kind: 'heading', text: orderPaper.conditionsHeading },
     { kind: 'conditions', columns: 2, items: content.conditions.map((condition) => condition.text) },
     { kind: 'heading', text: orderPaper.cautionsHeading },
