@@ -62,7 +62,7 @@ describe('the list of sheets', () => {
 
 const people = [...new Set(everySheet.map((sheet) => sheet.as))]
 
-/** Waits until nothing was asked of the server for half a second. Made before the page first opens anything. */
+/** Waits until nothing was asked of the server for a quarter of a second. Made before the page first opens anything. */
 function restOf(page: Page): () => Promise<void> {
   let open = 0
   let changedMs = performance.now()
@@ -75,7 +75,7 @@ function restOf(page: Page): () => Promise<void> {
   page.on('requestfailed', count(-1))
   return async () => {
     changedMs = performance.now()
-    while (open > 0 || performance.now() - changedMs < 500) await page.waitForTimeout(50)
+    while (open > 0 || performance.now() - changedMs < 250) await page.waitForTimeout(50)
   }
 }
 
