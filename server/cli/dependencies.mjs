@@ -23,7 +23,11 @@ export async function ensureDependencies(root, { say = () => {}, signal } = {}) 
   say('installing what package-lock.json lists (about a minute)')
   // with NODE_ENV=production npm would leave out vite, which builds the client
   const env = { ...process.env, NODE_ENV: '' }
-  const { code, output } = await runCommand('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], { cwd: root, env, signal })
+  const { code, output } = await runCommand('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], {
+    cwd: root,
+    env,
+    signal,
+  })
   if (code !== 0)
     throw new Advice(
       `npm ci failed:\n${tail(output, 20)}`,

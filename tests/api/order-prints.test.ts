@@ -109,7 +109,7 @@ describe('a printed order that is looked up', () => {
     const text = textOf(await printed(`/api/orders/${number}/print`)).replace(/\s+/g, ' ')
     // 2,181.4 L × 2 mg/L = 4.3628 g, worked by hand
     expect(text).toMatch(
-      /Unrounded 4\.36\d* g\. The balance or measure reads to 0\.01 g, so 4\.36 g is weighed/,
+      /Unrounded 4\.36\d+ g\. The balance or measure reads to 0\.01 g, so 4\.36 g is weighed/,
     )
   })
 
