@@ -9,6 +9,7 @@ import type { SignatureBlock } from '../../../shared/contracts/signing.contract.
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import { formatUnrounded } from '../../../shared/domain/quantities/format-unrounded.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
@@ -136,16 +137,11 @@ function workingBlock({ content }: OrderPaper): DocumentBlock {
   return { kind: 'working', lines }
 }
 
-const unroundedDigits = 8
-
 /** From the last line of the working to what is weighed, in the words of the screen. */
 function roundingBlock({ content: { amount, fields } }: OrderPaper): DocumentBlock[] {
   if (!amount.measured || !fields.division) return []
   const text = orderViewWords.rounded({
-    unrounded: formatDose(
-      Number(amount.unrounded.toPrecision(unroundedDigits)),
-      amount.unroundedUnit as UnitCode,
-    ).text,
+    unrounded: formatUnrounded(amount.unrounded, amount.unroundedUnit as UnitCode).text,
     division: formatDose(fields.division.value, fields.division.unit as UnitCode).text,
     amount: amount.text,
   })

@@ -1,4 +1,5 @@
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
+import { formatUnrounded } from '../../../shared/domain/quantities/format-unrounded.ts'
 import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
 import type { EnteredQuantity } from '../../../shared/contracts/primitives.ts'
 import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
@@ -48,8 +49,6 @@ export function OrderWorking({ lines }: { lines: OrderPreview['working'] }) {
   )
 }
 
-const unroundedDigits = 8
-
 /** From the last line of the working to what is weighed: the step of the balance, and what the volume's error makes of it. */
 export function AmountNotes({
   amount,
@@ -58,7 +57,7 @@ export function AmountNotes({
   amount: NonNullable<OrderPreview['amount']>
   division: EnteredQuantity | null
 }) {
-  const unrounded = formatDose(Number(amount.unrounded.toPrecision(unroundedDigits)), amount.unroundedUnit)
+  const unrounded = formatUnrounded(amount.unrounded, amount.unroundedUnit)
   return (
     <>
       {amount.measured && division ? (
