@@ -90,7 +90,13 @@ describe.each([desk, phone])('the registrar at $width px', (size) => {
     // one step back by mistake does not throw away what was typed
     await page.evaluate(() => history.back())
     await page.getByRole('alertdialog', { name: 'Leave without keeping it?' }).waitFor()
-    await page.getByRole('button', { name: 'Go on writing' }).click()
+    // the question goes in the very event of the answer: whoever types on at once types into the form
+    const isGone = await page.getByRole('button', { name: 'Go on writing' }).evaluate(async (button) => {
+      ;(button as HTMLButtonElement).click()
+      await Promise.resolve()
+      return document.querySelector('dialog[open]') === null
+    })
+    expect(isGone).toBe(true)
     expect(await page.getByLabel(/Number on their paper/).inputValue()).toBe('LA-26-04')
     await choose(page, 'Taxon', 'sting', /Southern stingray/)
     await page.getByRole('radio', { name: 'Group', exact: true }).click()
