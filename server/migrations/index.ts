@@ -29,6 +29,7 @@ import { OrdersAlikeByWater1764600000043 } from './0043-orders-alike-by-water.ts
 import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
 import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
+import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -64,4 +65,5 @@ export const migrations = [
   ContactsOfDoses1764600000044,
   BodiesNamedAgain1764600000045,
   ContactsNeedAnEnd1764600000050,
+  StandingLockLifts1764600000051,
 ]

@@ -3,7 +3,7 @@ import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
 import type { CaseDetail } from '../../shared/contracts/quarantine.contract.ts'
 import type { CaseStepView } from '../../shared/contracts/quarantine-primitives.ts'
 import { aCase } from '../builders/a-case.ts'
-import { aClearableCase, clear, moveOut } from '../builders/a-clearance.ts'
+import { aClearableCase, clear, expectInside, moveOut } from '../builders/a-clearance.ts'
 import type { BuiltCase } from '../builders/a-case.ts'
 import { aValve } from '../builders/a-water.ts'
 import { layoutOf, nfkc, pageCount } from '../pdf/support/poppler.ts'
@@ -322,12 +322,8 @@ describe('a clearance changed in the database', () => {
     expect(rowCount).toBe(1)
     return one
   }
-  /** Nobody can tell any more that these animals were cleared: they stay inside the boundary. */
-  const locksOf = async (one: BuiltCase) => {
-    const { agent } = await api.as('keeper')
-    const { body } = await agent.get(`/api/animals/${one.animal.accession}`).expect(200)
-    return body.locks.map((lock: { kind: string; sourceLabel: string }) => [lock.kind, lock.sourceLabel])
-  }
+  const anotherCase = `(SELECT c.id FROM quarantine_cases c WHERE c.id NOT IN
+    (SELECT e.case_id FROM case_events e WHERE e.kind = 'cleared') LIMIT 1)`
   const stateOf = async (one: BuiltCase) => (await detailOf(one)).clearance?.signature.state
 
   it('is shown as broken when its text was changed', async () => {
@@ -335,7 +331,7 @@ describe('a clearance changed in the database', () => {
       `UPDATE signed_texts SET text = replace(text, '"wanted":2', '"wanted":1') WHERE subject_id = $1`,
     )
     expect(await stateOf(one)).toBe('broken')
-    expect(await locksOf(one)).toEqual([['boundary', one.number]])
+    await expectInside(api, one)
     const moved = await moveOut(api, one)
     expect([moved.status, moved.body.code]).toEqual([403, 'documented-transfer-needed'])
     expect(await textOf(one)).toContain('Record check failed')
@@ -354,10 +350,18 @@ describe('a clearance changed in the database', () => {
   ])('is shown as broken when its row was changed: %s', async (_what, sql) => {
     const one = await brokenBy(`${sql} AND kind = 'cleared'`)
     expect(await stateOf(one)).toBe('broken')
-    expect(await locksOf(one)).toEqual([['boundary', one.number]])
+    await expectInside(api, one)
     const reply = await (await api.as('keeper')).agent.get(`${one.url}/certificate.pdf`).buffer(true)
     if (reply.status === 200) expect(await textOf(one)).toContain('Record check failed')
     else expect(reply.body.code).toBe('broken-record')
+  })
+
+  it.each([
+    ['is gone', 'DELETE FROM case_events WHERE case_id = $1'],
+    ['says something else', `UPDATE case_events SET kind = 'closed' WHERE case_id = $1`],
+    ['went to another case', `UPDATE case_events SET case_id = ${anotherCase} WHERE case_id = $1`],
+  ])('lets no animal out where its row %s', async (_what, sql) => {
+    await expectInside(api, await brokenBy(`${sql} AND kind = 'cleared'`))
   })
 
   it('is not printed at all when nothing can be read of it any more', async () => {

@@ -202,6 +202,9 @@ describe('an acquisition that was entered wrongly', () => {
       })
       .expect(201)
     const number = opened.body.number as string
+    const locks = async () =>
+      (await tech.agent.get(`/api/animals/${accession}`).expect(200)).body.locks as unknown[]
+    expect(await locks()).toMatchObject([{ kind: 'boundary', sourceLabel: number }])
     const reply = await voidIt(transaction.number)
     expect([reply.status, reply.body.code]).toEqual([409, 'later-records'])
     expect(reply.body.detail).toContain(number)
@@ -216,6 +219,7 @@ describe('an acquisition that was entered wrongly', () => {
         decision: { kind: 'voided', voidsEventId: memberId },
       })
       .expect(201)
+    expect(await locks()).toEqual([])
     expect((await voidIt(transaction.number)).status).toBe(200)
   })
 

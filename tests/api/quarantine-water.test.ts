@@ -111,7 +111,8 @@ describe('the water of a quarantine case', () => {
     await api.composition.parts.transactions.inTransaction(
       { actor: { personId: null, printedName: 'test', roles: [] }, requestId: 'test' },
       async (tx) => {
-        const source = { kind: 'quarantine-case', id: api.nextId(), label: 'Q-999' }
+        // of another keeper of locks than the cases: a case that lifts has its clearance behind it
+        const source = { kind: 'earlier-house', id: api.nextId(), label: 'Q-999' }
         const { lockMovement, liftMovement } = api.composition.animals.service
         const at = '2026-11-06T14:00:00Z'
         await lockMovement(tx, { animalId: guest.id, kind: 'boundary', source, reason: 'in quarantine', at })

@@ -1,3 +1,4 @@
+import { expect } from 'vitest'
 import { newKey, password, testDay } from '../support/api.ts'
 import type { TestApi, TestPerson } from '../support/api.ts'
 import { aCase } from './a-case.ts'
@@ -54,4 +55,13 @@ export async function moveOut(api: TestApi, one: BuiltCase) {
     toEnclosureId: hall.id,
     happenedAt: testDay.toISOString(),
   })
+}
+
+/** Nobody can tell any more that these animals were cleared: wherever they are shown, they stay inside the boundary. */
+export async function expectInside(api: TestApi, one: BuiltCase): Promise<void> {
+  const { agent } = await api.as('keeper')
+  const { body: sheet } = await agent.get(`/api/animals/${one.animal.accession}`).expect(200)
+  expect(sheet.locks).toMatchObject([{ kind: 'boundary', sourceLabel: one.number }])
+  const { body: list } = await agent.get(`/api/animals?q=${one.animal.accession}`).expect(200)
+  expect(list.rows).toMatchObject([{ accession: one.animal.accession, lock: 'boundary' }])
 }

@@ -9,7 +9,7 @@ import { doseSource } from './animal-watch.entity.ts'
 import { presentCount, presentNewestWeight } from './animals.present.ts'
 import { readAnimals } from './animals.reads.ts'
 import type { AnimalReadRow } from './animals.reads.ts'
-import { countOpenDiscrepancies, readDeaths, readDiscrepancies, readLocks } from './chart.reads.ts'
+import { countOpenDiscrepancies, readDeaths, readDiscrepancies, readLocksFrom } from './chart.reads.ts'
 import { readStaysIn } from './stays.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 
@@ -97,9 +97,9 @@ export function createAnimalQuestions(parts: { dataSource: Db }) {
       return (await facts(db, await readAnimals(db, { at, accession })))[0] ?? null
     },
 
-    /** Movement locks in force at an instant. */
-    async locksOf(animalIds: readonly string[], at: Date, db: Db = parts.dataSource) {
-      const rows = await readLocks(db, animalIds, at)
+    /** Movement locks in force at an instant that some cases or clock events put on. */
+    async locksFrom(sourceIds: readonly string[], at: Date, db: Db = parts.dataSource) {
+      const rows = await readLocksFrom(db, sourceIds, at)
       return rows.map((row) => ({
         lockId: row.id,
         animalId: row.animal_id,

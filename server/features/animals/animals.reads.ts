@@ -94,7 +94,6 @@ const asOf = `
          w.weight_kg, w.entered_value AS weight_value, w.entered_unit AS weight_unit,
          w.animals_weighed AS weight_animals, w.basis AS weight_basis, w.happened_at AS weight_at,
          w.happened_on::text AS weight_on,
-         CASE WHEN k.kinds IS NULL THEN 'none' WHEN 'all' = ANY (k.kinds) THEN 'all' ELSE 'boundary' END AS lock,
          (SELECT count(*)::int FROM discrepancies q
            WHERE q.animal_id = a.id AND q.recorded_at <= $1
              AND NOT EXISTS (SELECT 1 FROM discrepancy_resolutions z
@@ -113,11 +112,16 @@ const asOf = `
                               sum(x.delta) FILTER (WHERE x.happened_at > n.happened_at) AS moved_since
                          FROM live_count_entries x WHERE x.animal_id = a.id AND ${happenedBy('x', '$1')}) c ON true
     LEFT JOIN LATERAL (SELECT w.* FROM live_weights w WHERE w.animal_id = a.id AND ${happenedBy('w', '$1')}
-                        ORDER BY w.happened_at DESC, w.recorded_at DESC, w.id DESC LIMIT 1) w ON true
-    LEFT JOIN LATERAL (SELECT array_agg(k.kind) AS kinds FROM movement_locks k
-                        WHERE k.animal_id = a.id AND ${happenedBy('k', '$1')}
-                          AND NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
-                                           WHERE f.lock_id = k.id AND ${happenedBy('f', '$1')})) k ON true`
+                        ORDER BY w.happened_at DESC, w.recorded_at DESC, w.id DESC LIMIT 1) w ON true`
+
+/**
+ * What keeps an animal where it is: of two kinds the stronger, `all`, which sorts first. Asked only of the rows that are
+ * shown, since every lift is held against the record behind it.
+ */
+const lockOf = `coalesce((
+  SELECT min(k.kind) FROM movement_locks k
+   WHERE k.animal_id = r.id AND ${happenedBy('k', '$1')}
+     AND NOT EXISTS (SELECT 1 FROM standing_lock_lifts f WHERE f.lock_id = k.id AND ${happenedBy('f', '$1')})), 'none')`
 
 /** Animals and groups at an instant, by whatever filter; `total` of each row counts all that fit. */
 export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<AnimalReadRow[]> {
@@ -151,7 +155,7 @@ export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<Animal
     .split(', ')
     .map((column) => `${column} ${direction} NULLS LAST`)
   return db.query(
-    `SELECT r.*, count(*) OVER ()::int AS total
+    `SELECT r.*, ${lockOf} AS lock, count(*) OVER ()::int AS total
        FROM (${asOf} ${before.length > 0 ? `WHERE ${before.join(' AND ')}` : ''}) r
       ${after.length > 0 ? `WHERE ${after.join(' AND ')}` : ''}
       ORDER BY ${order.join(', ')}, r.accession

@@ -1,7 +1,6 @@
 import { updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { Animal, AnimalDescription, Identifier, IdentifierEnd } from './animal.entity.ts'
-import { liftedByChangedClearance } from './changed-clearance.ts'
 
 /** Locks the heads of animals, in one order, until the transaction ends. */
 export async function lockAnimals(tx: Tx, ids: readonly string[]): Promise<Map<string, Animal>> {
@@ -110,9 +109,9 @@ export async function wasClearedHere(tx: Tx, animalId: string, at: Date): Promis
   const rows: unknown[] = await tx.manager.query(
     `SELECT 1 FROM stays s
        JOIN movement_locks k ON k.animal_id = s.animal_id AND k.kind = 'boundary'
-       JOIN movement_lock_lifts f ON f.lock_id = k.id
+       JOIN standing_lock_lifts f ON f.lock_id = k.id
       WHERE s.animal_id = $1 AND s.during @> $2::timestamptz AND f.happened_at >= lower(s.during)
-        AND f.happened_at <= $2 AND NOT ${liftedByChangedClearance('k')}`,
+        AND f.happened_at <= $2`,
     [animalId, at],
   )
   return rows.length > 0
@@ -139,10 +138,9 @@ export async function findArrivalsInBoundary(
          JOIN enclosures e ON e.id = s.enclosure_id AND e.boundary = r.boundary)
      SELECT run.enclosure_id, run.since FROM run
       WHERE NOT EXISTS (
-        SELECT 1 FROM movement_locks k JOIN movement_lock_lifts f ON f.lock_id = k.id
+        SELECT 1 FROM movement_locks k JOIN standing_lock_lifts f ON f.lock_id = k.id
          WHERE k.animal_id = $1 AND k.kind = 'boundary' AND f.happened_at <= $2
-           AND f.happened_at >= (SELECT min(first.since) FROM run first)
-           AND NOT ${liftedByChangedClearance('k')})`,
+           AND f.happened_at >= (SELECT min(first.since) FROM run first))`,
     [animalId, at],
   )
 }

@@ -7,7 +7,6 @@ import type {
 } from '../../../shared/domain/animals/description.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { happenedBy } from '../../platform/database/happened-by.ts'
-import { liftedByChangedClearance } from './changed-clearance.ts'
 
 /** The times of a fact and its recorder's name, as every read here gives them. */
 export interface FactRow {
@@ -180,18 +179,22 @@ export interface LockReadRow {
   happened_at: Date
 }
 
-/** Locks in force at an instant. */
+const locksInForce = (of: 'animal_id' | 'source_id') => `
+  SELECT k.id, k.animal_id, k.kind, k.source_kind, k.source_id, k.source_label, k.reason, k.happened_at
+    FROM movement_locks k
+   WHERE k.${of} = ANY ($1) AND ${happenedBy('k', '$2')}
+     AND NOT EXISTS (SELECT 1 FROM standing_lock_lifts f
+                      WHERE f.lock_id = k.id AND ${happenedBy('f', '$2')})
+   ORDER BY k.happened_at, k.id`
+
+/** Locks of some animals in force at an instant. */
 export function readLocks(db: Db, animalIds: readonly string[], at: Date): Promise<LockReadRow[]> {
-  return db.query(
-    `SELECT k.id, k.animal_id, k.kind, k.source_kind, k.source_id, k.source_label, k.reason, k.happened_at
-       FROM movement_locks k
-      WHERE k.animal_id = ANY ($1) AND ${happenedBy('k', '$2')}
-        AND (NOT EXISTS (SELECT 1 FROM movement_lock_lifts f
-                          WHERE f.lock_id = k.id AND ${happenedBy('f', '$2')})
-             OR ${liftedByChangedClearance('k')})
-      ORDER BY k.happened_at, k.id`,
-    [animalIds, at],
-  )
+  return db.query(locksInForce('animal_id'), [animalIds, at])
+}
+
+/** Locks that some cases or clock events put on, in force at an instant, whosever they are. */
+export function readLocksFrom(db: Db, sourceIds: readonly string[], at: Date): Promise<LockReadRow[]> {
+  return db.query(locksInForce('source_id'), [sourceIds, at])
 }
 
 export interface DiscrepancyReadRow extends FactRow {

@@ -54,11 +54,10 @@ function listWanted(facts: ClockFacts): WantedLock[] {
 export async function settleLocks(parts: { animals: Animals }, tx: Tx, facts: ClockFacts): Promise<void> {
   const { animals } = parts
   const wanted = new Map(listWanted(facts).map((lock) => [keyOf(lock), lock]))
-  const ours = new Set([...facts.cases.map(({ id }) => id), ...facts.events.map(({ id }) => id)])
-  const animalIds = [...new Set(facts.batches.map((row) => row.animal_id))].sort()
-  const standing = (await animals.questions.locksOf(animalIds, tx.at, tx.manager)).filter(
-    ({ sourceKind, sourceId }) =>
-      (sourceKind === boundarySource || sourceKind === lockSource) && ours.has(sourceId),
+  // asked by where a lock came from: an animal that was struck out of a batch is in it no more, and is held all the same
+  const ours = [...facts.cases.map(({ id }) => id), ...facts.events.map(({ id }) => id)]
+  const standing = (await animals.questions.locksFrom(ours, tx.at, tx.manager)).filter(
+    ({ sourceKind }) => sourceKind === boundarySource || sourceKind === lockSource,
   )
   const has = new Set(standing.map(({ animalId, sourceId }) => `${animalId} ${sourceId}`))
   for (const [key, lock] of wanted) if (!has.has(key)) await animals.service.lockMovement(tx, lock)
