@@ -30,6 +30,7 @@ import { ContactsOfDoses1764600000044 } from './0044-contacts-of-doses.ts'
 import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
 import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
 import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
+import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -66,4 +67,5 @@ export const migrations = [
   BodiesNamedAgain1764600000045,
   ContactsNeedAnEnd1764600000050,
   StandingLockLifts1764600000051,
+  LiftsOneByOne1764600000052,
 ]
