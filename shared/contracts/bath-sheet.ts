@@ -152,6 +152,10 @@ export const BathSheet = z.object({
       }),
     )
     .describe('Working by the water as it is now'),
+  roundingText: z
+    .string()
+    .nullable()
+    .describe('What the amount now is unrounded, and what the balance or measure makes of it'),
   driftPercent: z.number().nullable().describe('How far the volume has moved since the signature, percent'),
   driftWithin: z.boolean().describe('Inside what the order allows'),
   cautions: z

@@ -14,6 +14,8 @@ import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
 
+type SheetCaution = BathSheet['cautions'][number]
+
 export interface BathPaper {
   /** As the person at the tank sees it now, with every amount. */
   sheet: BathSheet
@@ -139,6 +141,62 @@ function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
   }
 }
 
+const saidAsObstacle = ({ title, text }: SheetCaution) => `${title}. ${text}`
+const standsInTheWay = (sheet: BathSheet, caution: SheetCaution) =>
+  sheet.why.includes(saidAsObstacle(caution))
+
+/** Its title and text in one run, so that all the cautions of an ordinary dose stand on the page of the amount. */
+const cautionBlock = (caution: SheetCaution): DocumentBlock => ({
+  kind: 'caution',
+  level: caution.level,
+  lines: [[{ text: `${caution.title}.`, bold: true }, { text: ` ${caution.text}` }]],
+  ...(caution.overridden
+    ? {
+        override: [
+          { text: orderPaper.overridden({ name: caution.overridden.by }), bold: true },
+          { text: orderPaper.reason({ reason: caution.overridden.reason }) },
+        ],
+      }
+    : {}),
+})
+
+/** Two beside each other; read along the row, so their order stays. */
+const cautionPairs = (cautions: readonly SheetCaution[]): DocumentBlock[] =>
+  cautions.flatMap((caution, i): DocumentBlock[] => {
+    const beside = cautions[i + 1]
+    if (i % 2 === 1) return []
+    if (!beside) return [cautionBlock(caution)]
+    const columns = [caution, beside].map((one) => ({ share: 1, blocks: [cautionBlock(one)] }))
+    return [{ kind: 'columns', columns }]
+  })
+
+/** What stands in the way; a stop among it in its own look, and not a second time below. */
+function obstacleBlocks(sheet: BathSheet): DocumentBlock[] {
+  const stops = sheet.cautions.filter((caution) => standsInTheWay(sheet, caution))
+  const said = new Set(stops.map(saidAsObstacle))
+  return [
+    ...sheet.why
+      .filter((text) => !said.has(text))
+      .map((text): DocumentBlock => ({ kind: 'paragraph', text: [{ text, bold: true }] })),
+    ...cautionPairs(stops),
+  ]
+}
+
+/** Every line that the screen shows, and what the balance makes of the last. */
+function workingBlocks({ working, roundingText }: BathSheet): DocumentBlock[] {
+  if (working.length === 0) return []
+  const lines = working.map((line, i) => ({
+    what: line.label,
+    formula: line.shown,
+    result: line.result,
+    total: i === working.length - 1,
+  }))
+  return [
+    { kind: 'working', lines },
+    ...(roundingText === null ? [] : [{ kind: 'paragraph' as const, text: roundingText }]),
+  ]
+}
+
 /** No second person calculated it: whoever doses from the page is told. */
 const aloneBlock = ({ sheet }: BathPaper): DocumentBlock[] => {
   const alone = sheet.second?.aloneText ?? null
@@ -170,7 +228,6 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
   const short = formatFingerprint(block.hash)
   const notice = paper.notice ?? (sheet.why.length > 0 ? bathPaper.notReady : null)
   const unit = formatDose('1', (sheet.amountNow?.unit ?? 'g') as UnitCode).symbol
-  const last = sheet.working.length - 1
   return {
     title: bathPaper.title({ number: sheet.number, dose: sheet.key }),
     language: 'en',
@@ -204,43 +261,12 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       { kind: 'rule' },
       { kind: 'caution', level: 'stop-if', lines: [sheet.stopIf] },
       ...aloneBlock(paper),
-      ...listed(
-        bathPaper.inTheWay,
-        sheet.why.map((text) => ({ kind: 'paragraph', text: [{ text, bold: true }] })),
-      ),
+      ...listed(bathPaper.inTheWay, obstacleBlocks(sheet)),
       ...listed(bathPaper.conditions, sheet.steps.length > 0 ? [conditionsBlock(paper)] : []),
-      ...listed(
-        bathPaper.working,
-        sheet.working.length > 0
-          ? [
-              {
-                kind: 'working',
-                lines: sheet.working.map((line, i) => ({
-                  what: line.label,
-                  formula: line.shown,
-                  result: line.result,
-                  total: i === last,
-                })),
-              },
-            ]
-          : [],
-      ),
+      ...listed(bathPaper.working, workingBlocks(sheet)),
       ...listed(
         bathPaper.cautions,
-        sheet.cautions.map((caution) => ({
-          kind: 'caution',
-          level: caution.level,
-          title: caution.title,
-          lines: [caution.text],
-          ...(caution.overridden
-            ? {
-                override: [
-                  { text: orderPaper.overridden({ name: caution.overridden.by }), bold: true },
-                  { text: orderPaper.reason({ reason: caution.overridden.reason }) },
-                ],
-              }
-            : {}),
-        })),
+        cautionPairs(sheet.cautions.filter((caution) => !standsInTheWay(sheet, caution))),
       ),
       ...listed(
         bathPaper.overrides,

@@ -23,6 +23,7 @@ import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
 import { presentRecord, storedText } from './present-record.ts'
 import { runningBaths } from './running-baths.ts'
+import { saidRounding } from './said-rounding.ts'
 import { aloneOf, firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
 import type { Calculations } from './second-person.ts'
 import { findingOf } from './signed-overrides.ts'
@@ -323,6 +324,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
           shown: formatExpression(line.expression),
           result: formatWorkingValue(line).text,
         })),
+    roundingText: hide ? null : saidRounding(situation),
     driftPercent: drift?.percent ?? null,
     driftWithin: drift?.within ?? false,
     cautions: [

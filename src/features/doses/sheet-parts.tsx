@@ -131,6 +131,7 @@ export function Amounts({ sheet }: { sheet: BathSheet }) {
           }))}
         />
       ) : null}
+      {sheet.roundingText === null ? null : <p className="t-note">{sheet.roundingText}</p>}
     </section>
   )
 }

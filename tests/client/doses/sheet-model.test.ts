@@ -101,6 +101,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   blind: false,
   signedAmountText: '218\u00a0mL',
   amountNowText: '218\u00a0mL',
+  roundingText: null,
   amountNow: { value: '218', unit: 'mL' },
   working: [],
   driftPercent: 0,
