@@ -1,5 +1,9 @@
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
-import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
+import type {
+  CautionBlock,
+  DocumentBlock,
+  PdfDocumentModel,
+} from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
@@ -145,30 +149,33 @@ const saidAsObstacle = ({ title, text }: SheetCaution) => `${title}. ${text}`
 const standsInTheWay = (sheet: BathSheet, caution: SheetCaution) =>
   sheet.why.includes(saidAsObstacle(caution))
 
-/** Its title and text in one run, so that all the cautions of an ordinary dose stand on the page of the amount. */
-const cautionBlock = (caution: SheetCaution): DocumentBlock => ({
-  kind: 'caution',
-  level: caution.level,
-  lines: [[{ text: `${caution.title}.`, bold: true }, { text: ` ${caution.text}` }]],
-  ...(caution.overridden
-    ? {
+const cautionLine = ({ title, text }: SheetCaution) => [
+  { text: `${title}.`, bold: true },
+  { text: ` ${text}` },
+]
+
+/** Neighbours of one level in one edge, so that an ordinary dose has them all on the page of its amount. */
+function cautionBlocks(cautions: readonly SheetCaution[]): DocumentBlock[] {
+  const blocks: CautionBlock[] = []
+  for (const caution of cautions) {
+    const line = cautionLine(caution)
+    const before = blocks.at(-1)
+    if (caution.overridden)
+      blocks.push({
+        kind: 'caution',
+        level: caution.level,
+        lines: [line],
         override: [
           { text: orderPaper.overridden({ name: caution.overridden.by }), bold: true },
           { text: orderPaper.reason({ reason: caution.overridden.reason }) },
         ],
-      }
-    : {}),
-})
-
-/** Two beside each other; read along the row, so their order stays. */
-const cautionPairs = (cautions: readonly SheetCaution[]): DocumentBlock[] =>
-  cautions.flatMap((caution, i): DocumentBlock[] => {
-    const beside = cautions[i + 1]
-    if (i % 2 === 1) return []
-    if (!beside) return [cautionBlock(caution)]
-    const columns = [caution, beside].map((one) => ({ share: 1, blocks: [cautionBlock(one)] }))
-    return [{ kind: 'columns', columns }]
-  })
+      })
+    else if (before?.level === caution.level && !before.override)
+      blocks[blocks.length - 1] = { ...before, lines: [...before.lines, line] }
+    else blocks.push({ kind: 'caution', level: caution.level, lines: [line] })
+  }
+  return blocks
+}
 
 /** What stands in the way; a stop among it in its own look, and not a second time below. */
 function obstacleBlocks(sheet: BathSheet): DocumentBlock[] {
@@ -178,7 +185,7 @@ function obstacleBlocks(sheet: BathSheet): DocumentBlock[] {
     ...sheet.why
       .filter((text) => !said.has(text))
       .map((text): DocumentBlock => ({ kind: 'paragraph', text: [{ text, bold: true }] })),
-    ...cautionPairs(stops),
+    ...cautionBlocks(stops),
   ]
 }
 
@@ -266,7 +273,7 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       ...listed(bathPaper.working, workingBlocks(sheet)),
       ...listed(
         bathPaper.cautions,
-        cautionPairs(sheet.cautions.filter((caution) => !standsInTheWay(sheet, caution))),
+        cautionBlocks(sheet.cautions.filter((caution) => !standsInTheWay(sheet, caution))),
       ),
       ...listed(
         bathPaper.overrides,
