@@ -170,6 +170,7 @@ export const historyWords = defineMessages({
   struckTag: 'struck out',
   placedAt: (p: { place: string }) => `Into ${p.place}.`,
   leftFrom: (p: { place: string }) => `From ${p.place}.`,
+  diedIn: (p: { place: string }) => `In ${p.place}.`,
   site: (p: { where: string }) => `At ${p.where}.`,
   ofAnimals: (p: { delta: number; after: number }) =>
     `${animals(Math.abs(p.delta))}, ${String(p.after)} after it.`,

@@ -28,6 +28,7 @@ export function sayEventTitle(event: HistoryEvent): string {
 export function sayEventDetails(event: HistoryEvent): string[] {
   const { found, sourceCode } = event
   const isMove = event.kind === 'move'
+  const isDeath = event.kind === 'death' || event.kind === 'euthanasia'
   return [
     found === null
       ? null
@@ -37,7 +38,9 @@ export function sayEventDetails(event: HistoryEvent): string[] {
     event.delta === 0 || event.voided
       ? null
       : words.ofAnimals({ delta: event.delta, after: event.countAfter }),
-    event.from === null || isMove ? null : words.leftFrom({ place: sayPlace(event.from) ?? '' }),
+    event.from === null || isMove
+      ? null
+      : words[isDeath ? 'diedIn' : 'leftFrom']({ place: sayPlace(event.from) ?? '' }),
     event.to === null || isMove ? null : words.placedAt({ place: sayPlace(event.to) ?? '' }),
     sitePhrase(event.site),
     event.transaction === null ? null : words.transaction({ number: event.transaction }),

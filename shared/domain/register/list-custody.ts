@@ -16,7 +16,7 @@ export interface CustodyEvent {
   recordedAt: Instant
   /** Whole animals gained (positive) or lost; 0 for a move and for a look. A voided line keeps what it said. */
   delta: number
-  /** `null` is outside the house; both `null` when no place changed. */
+  /** `null` is outside the house; both `null` when no place changed. Of a death, `from` is where it happened. */
   fromEnclosureId: string | null
   toEnclosureId: string | null
   /** What was found when somebody counted or estimated; absent otherwise. */
@@ -63,7 +63,7 @@ export function listCustody(
       at: entry.at,
       recordedAt: entry.recordedAt,
       delta: entry.delta,
-      fromEnclosureId: move?.fromEnclosureId ?? null,
+      fromEnclosureId: move?.fromEnclosureId ?? (isDeath(entry) ? placeAt(moves, entry.at) : null),
       toEnclosureId: move?.toEnclosureId ?? null,
       transferId: entry.transferId,
       voided: entry.voided ?? false,
@@ -91,6 +91,20 @@ export function listCustody(
     }
   })
   return [...counts, ...moved, ...looked].sort(inOrder)
+}
+
+const isDeath = ({ kind }: CountEntry) => kind === 'death' || kind === 'euthanasia'
+
+/**
+ * Where those stood that were lost at an instant: where the last move that stands, at it or before, had brought them;
+ * at the instant at which the last of them left, what they left.
+ */
+function placeAt(moves: readonly Move[], at: Instant): string | null {
+  const last = moves
+    .filter((move) => !move.voided && compareInstants(move.at, at) <= 0)
+    .reduce<Move | null>((late, move) => (late && compareInstants(late.at, move.at) > 0 ? late : move), null)
+  if (last === null) return null
+  return last.toEnclosureId ?? (compareInstants(last.at, at) === 0 ? last.fromEnclosureId : null)
 }
 
 function inOrder(a: CustodyEvent, b: CustodyEvent): number {

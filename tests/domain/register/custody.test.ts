@@ -86,13 +86,41 @@ describe('the custody of a group', () => {
 
   it('lets the last of several losses at one instant empty the place', () => {
     const all = listCustody(
-      [entry('a', 'purchase', 2, 0), entry('b', 'death', -1, 9), entry('c', 'death', -1, 9)],
+      [entry('a', 'purchase', 2, 0), entry('b', 'sale', -1, 9), entry('c', 'sale', -1, 9)],
       [move('m1', null, 'tub', 0), move('m2', 'tub', null, 9)],
     )
     expect(all.map(({ eventId, fromEnclosureId }) => [eventId, fromEnclosureId])).toEqual([
       ['a', null],
       ['b', null],
       ['c', 'tub'],
+    ])
+  })
+
+  it('says of each death where the last move that stands had put them', () => {
+    const struck = { ...move('m3', 'quarantine', 'tub', 4), voided: true }
+    const all = listCustody(
+      [
+        entry('a', 'purchase', 5, 0),
+        entry('b', 'death', -1, 3),
+        entry('c', 'euthanasia', -1, 5),
+        entry('d', 'death', -1, 15),
+        entry('e', 'death', -1, 20),
+        entry('f', 'death', -1, 20),
+        entry('g', 'death', -1, 18, { voided: true }),
+      ],
+      [...moves, struck, move('m4', 'display', null, 20)],
+    )
+    expect(
+      all
+        .filter(({ kind }) => kind === 'death' || kind === 'euthanasia')
+        .map(({ eventId, fromEnclosureId }) => [eventId, fromEnclosureId]),
+    ).toEqual([
+      ['b', 'quarantine'],
+      ['c', 'quarantine'],
+      ['d', 'display'],
+      ['g', 'display'],
+      ['e', 'display'],
+      ['f', 'display'],
     ])
   })
 
