@@ -45,6 +45,11 @@ export const recordedFields = {
   recordedBy: z.string().describe('Who wrote it down'),
 }
 
+/** A fact that was entered with its date alone stands in the ledgers at the open end of it; the date is what is known. */
+export const KnownOn = PartialDate.nullable().describe(
+  'Date, month or year as entered, where the time of day is not known; null where it is',
+)
+
 export const Struck = z
   .object({
     reason: z.string().describe('Why it was struck out'),

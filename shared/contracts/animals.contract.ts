@@ -9,6 +9,7 @@ import {
   Count,
   DeathKindName,
   IdentifierKindName,
+  KnownOn,
   NewestWeight,
   Place,
   QuarantineKindName,
@@ -44,6 +45,7 @@ export const AnimalRow = z.object({
   stage: StageName,
   place: Place.nullable().describe('Enclosure it is in; null outside the house'),
   since: Instant.nullable().describe('In this enclosure since'),
+  sinceKnownOn: KnownOn,
   count: Count,
   newestWeight: NewestWeight.nullable().describe('Newest weight; null when it was never weighed'),
   lock: LockState,
@@ -90,6 +92,7 @@ export const Animal = AnimalRow.extend({
   splitFrom: AccessionNumber.nullable().describe('Group that it was taken from'),
   splitInto: z.array(AccessionNumber).describe('Groups and individuals taken from it'),
   arrivedAt: Instant.nullable().describe('First moment in the house'),
+  arrivedKnownOn: KnownOn,
   identifiers: z.array(AnimalIdentifier).describe('Every mark it ever had'),
   locks: z
     .array(
@@ -210,6 +213,7 @@ export const MoveEntry = z.object({
     .describe('Of a veterinarian’s transfer across a quarantine boundary'),
   againstRule: z.string().nullable().describe('Rule that it broke when it happened'),
   ...recordedFields,
+  knownOn: KnownOn,
   struck: Struck,
 })
 export type MoveEntry = z.infer<typeof MoveEntry>
@@ -233,6 +237,7 @@ export const CountLine = z.object({
   other: AccessionNumber.nullable().describe('The other group of a split or merge'),
   reason: z.string().nullable().describe('In words'),
   ...recordedFields,
+  knownOn: KnownOn,
   struck: Struck,
 })
 export type CountLine = z.infer<typeof CountLine>
@@ -286,6 +291,7 @@ export const LogLine = z.object({
     .record(z.string(), z.union([z.string(), z.number(), z.null()]))
     .describe('Figures and names for its sentence'),
   ...recordedFields,
+  knownOn: KnownOn,
   struckReason: z.string().nullable().describe('Why it was struck out, where it was'),
 })
 export type LogLine = z.infer<typeof LogLine>

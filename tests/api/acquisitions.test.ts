@@ -126,6 +126,31 @@ describe('an acquisition', () => {
     expect(animal.body.count).toMatchObject({ basis: 'estimated', ledger: 350, low: 300, high: 400 })
   })
 
+  it('says the date alone, on the page, in the list, the log and the history, where no time was entered', async () => {
+    const { agent } = await api.as('registrar')
+    for (const [on, time] of [['2026-11-20'], ['2026-10'], ['2026-11-20', '00:00']]) {
+      const known = time === undefined ? on : null
+      const came = await anAcquisition(api, {
+        on,
+        time,
+        lines: [line({ count: 9, estimate: { low: 8, high: 10 } })],
+      })
+      const at = `/api/animals/${came.lines[0]?.accession ?? ''}`
+      const read = async (path: string) => (await agent.get(path).expect(200)).body
+      expect(await read(at)).toMatchObject({ sinceKnownOn: known, arrivedKnownOn: known })
+      expect((await read(`${at}/moves`)).rows).toMatchObject([{ kind: 'arrival', knownOn: known }])
+      expect((await read(`${at}/counts`)).lines).toMatchObject([{ delta: 9, knownOn: known }])
+      const log = (await read(`${at}/log`)).rows as { kind: string; knownOn: string | null }[]
+      expect(log.map((row) => row.kind).sort()).toEqual(['count', 'description', 'move', 'statement'])
+      expect(log.map((row) => row.knownOn)).toEqual(log.map(() => known))
+      const { events } = await read(`${at}/history`)
+      expect(events).toMatchObject([
+        { kind: 'found', on, exact: known === null },
+        { kind: 'estimated', on, exact: known === null },
+      ])
+    }
+  })
+
   it('adds to a group that is already here', async () => {
     const first = await anAcquisition(api, { on: '2026-10-01', lines: [line({ count: 10 })] })
     const animalId = first.lines[0]?.animalId

@@ -25,7 +25,7 @@ export const animalCsvColumns = (): Column[] => [
   { header: headers.stage, value: (row) => stageNames[row.stage] },
   { header: headers.enclosure, value: (row) => row.place?.code ?? null },
   { header: headers.area, value: (row) => row.place?.area ?? null },
-  { header: headers.since, value: (row) => row.since },
+  { header: headers.since, value: (row) => row.sinceKnownOn ?? row.since },
   { header: headers.count, value: (row) => row.count.ledger },
   { header: headers.countBasis, value: (row) => basisNames[row.count.basis] },
   { header: headers.countLow, value: (row) => row.count.low },

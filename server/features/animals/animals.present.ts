@@ -16,6 +16,7 @@ import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import type { AnimalReadRow } from './animals.reads.ts'
 import type {
+  AnimalTies,
   CountLineReadRow,
   DeathReadRow,
   DiscrepancyReadRow,
@@ -102,6 +103,7 @@ export function presentAnimalRow(row: AnimalReadRow): AnimalRow {
             boundary: row.enclosure_boundary,
           },
     since: row.since && iso(row.since),
+    sinceKnownOn: row.since_known_on,
     count: presentCount(row),
     newestWeight: presentNewestWeight(row),
     lock: row.lock,
@@ -121,7 +123,7 @@ const sheetActions: readonly Action[] = [
 
 export interface AnimalSheet {
   row: AnimalReadRow
-  ties: { split_from: string | null; split_into: string[]; arrived_at: Date | null }
+  ties: AnimalTies
   identifiers: IdentifierReadRow[]
   locks: LockReadRow[]
   discrepancies: DiscrepancyReadRow[]
@@ -139,6 +141,7 @@ export function presentAnimal(sheet: AnimalSheet, roles: readonly Role[]): Anima
     splitFrom: ties.split_from,
     splitInto: ties.split_into,
     arrivedAt: ties.arrived_at && iso(ties.arrived_at),
+    arrivedKnownOn: ties.arrived_known_on,
     identifiers: sheet.identifiers.map((one) => ({
       ...presentFact(one),
       kind: one.kind,
@@ -223,6 +226,7 @@ export const presentMove = (row: MoveReadRow): MoveEntry => ({
   reason: row.reason,
   documentedTransfer: row.documented_transfer,
   againstRule: row.against_rule,
+  knownOn: row.known_on,
   struck: presentStruck(row),
 })
 
@@ -233,6 +237,7 @@ export const presentCountLine = (row: CountLineReadRow): CountLine => ({
   balance: row.balance,
   other: row.other,
   reason: row.reason,
+  knownOn: row.known_on,
   struck: presentStruck(row),
 })
 
@@ -271,5 +276,6 @@ export const presentLogLine = (row: LogReadRow): LogLine => ({
   ...presentFact(row),
   kind: row.kind,
   facts: row.facts,
+  knownOn: row.known_on,
   struckReason: row.struck_reason,
 })

@@ -3,6 +3,7 @@ import type { QuarantineKindName, TaxonGroup } from '../../../shared/domain/taxa
 import type { Db } from '../../platform/database/db.ts'
 import { happenedBy } from '../../platform/database/happened-by.ts'
 import { containing } from '../../platform/database/like.ts'
+import { knownOn } from './known-on.ts'
 
 /** An animal or group as it stood at an instant. */
 export interface AnimalReadRow {
@@ -28,6 +29,7 @@ export interface AnimalReadRow {
   enclosure_area: string
   enclosure_boundary: string | null
   since: Date | null
+  since_known_on: string | null
   ledger: number
   statement_basis: 'counted' | 'estimated' | null
   statement_low: number
@@ -155,7 +157,8 @@ export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<Animal
     .split(', ')
     .map((column) => `${column} ${direction} NULLS LAST`)
   return db.query(
-    `SELECT r.*, ${lockOf} AS lock, count(*) OVER ()::int AS total
+    `SELECT r.*, ${lockOf} AS lock, ${knownOn('r.id', 'r.since')} AS since_known_on,
+            count(*) OVER ()::int AS total
        FROM (${asOf} ${before.length > 0 ? `WHERE ${before.join(' AND ')}` : ''}) r
       ${after.length > 0 ? `WHERE ${after.join(' AND ')}` : ''}
       ORDER BY ${order.join(', ')}, r.accession

@@ -7,6 +7,7 @@ import type {
 } from '../../../shared/domain/animals/description.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { happenedBy } from '../../platform/database/happened-by.ts'
+import { knownOn } from './known-on.ts'
 
 /** The times of a fact and its recorder's name, as every read here gives them. */
 export interface FactRow {
@@ -15,6 +16,11 @@ export interface FactRow {
   happened_on: string
   recorded_at: Date
   recorded_by_name: string | null
+}
+
+/** What a row adds that a transaction of the register may have written. */
+export interface KnownOnRow {
+  known_on: string | null
 }
 
 /** What a struck-out row adds. */
@@ -60,7 +66,7 @@ export interface PlaceReadRow {
   boundary: string | null
 }
 
-export interface MoveReadRow extends FactRow, StruckRow {
+export interface MoveReadRow extends FactRow, KnownOnRow, StruckRow {
   kind: 'arrival' | 'move' | 'departure'
   from_place: PlaceReadRow | null
   to_place: PlaceReadRow | null
@@ -76,7 +82,7 @@ const placeJson = (e: string) =>
 export function readMoves(db: Db, animalId: string): Promise<MoveReadRow[]> {
   return db.query(
     `SELECT ${fact('m')}, m.kind, ${placeJson('f')} AS from_place, ${placeJson('t')} AS to_place, m.reason,
-            m.documented_transfer, m.against_rule, ${struck}
+            m.documented_transfer, m.against_rule, ${knownOn('$1', 'm.happened_at')} AS known_on, ${struck}
        FROM moves m
        LEFT JOIN enclosures f ON f.id = m.from_enclosure_id
        LEFT JOIN enclosures t ON t.id = m.to_enclosure_id
@@ -86,7 +92,7 @@ export function readMoves(db: Db, animalId: string): Promise<MoveReadRow[]> {
   )
 }
 
-export interface CountLineReadRow extends FactRow, StruckRow {
+export interface CountLineReadRow extends FactRow, KnownOnRow, StruckRow {
   kind: string
   delta: number
   balance: number | null
@@ -97,6 +103,7 @@ export interface CountLineReadRow extends FactRow, StruckRow {
 export function readCountLines(db: Db, animalId: string): Promise<CountLineReadRow[]> {
   return db.query(
     `SELECT ${fact('c')}, c.kind, c.delta, b.balance, c.reason, ${struck},
+            ${knownOn('$1', 'c.happened_at')} AS known_on,
             (SELECT o.accession FROM count_entries h JOIN animals o ON o.id = h.animal_id
               WHERE h.transfer_id = c.transfer_id AND h.id <> c.id LIMIT 1) AS other
        FROM count_entries c
@@ -258,20 +265,25 @@ export async function countOpenDiscrepancies(
   return row.count
 }
 
+export interface AnimalTies {
+  split_from: string | null
+  split_into: string[]
+  arrived_at: Date | null
+  arrived_known_on: string | null
+}
+
 /** Family and history of one animal that its sheet names. */
-export async function readAnimalTies(
-  db: Db,
-  animalId: string,
-): Promise<{ split_from: string | null; split_into: string[]; arrived_at: Date | null }> {
-  const [row]: [{ split_from: string | null; split_into: string[]; arrived_at: Date | null }] =
-    await db.query(
-      `SELECT (SELECT f.accession FROM animals f WHERE f.id = a.split_from_id) AS split_from,
+export async function readAnimalTies(db: Db, animalId: string): Promise<AnimalTies> {
+  const [row]: [AnimalTies] = await db.query(
+    `SELECT (SELECT f.accession FROM animals f WHERE f.id = a.split_from_id) AS split_from,
             coalesce((SELECT array_agg(c.accession ORDER BY c.accession) FROM animals c
                        WHERE c.split_from_id = a.id), '{}') AS split_into,
-            (SELECT min(m.happened_at) FROM live_moves m WHERE m.animal_id = a.id) AS arrived_at
-       FROM animals a WHERE a.id = $1`,
-      [animalId],
-    )
+            i.arrived_at, ${knownOn('a.id', 'i.arrived_at')} AS arrived_known_on
+       FROM animals a
+       CROSS JOIN LATERAL (SELECT min(m.happened_at) AS arrived_at FROM live_moves m WHERE m.animal_id = a.id) i
+      WHERE a.id = $1`,
+    [animalId],
+  )
   return row
 }
 

@@ -1,7 +1,8 @@
 import type { Db } from '../../platform/database/db.ts'
-import type { FactRow } from './chart.reads.ts'
+import type { FactRow, KnownOnRow } from './chart.reads.ts'
+import { knownOn } from './known-on.ts'
 
-export interface LogReadRow extends FactRow {
+export interface LogReadRow extends FactRow, KnownOnRow {
   kind: string
   facts: Record<string, string | number | null>
   struck_reason: string | null
@@ -103,6 +104,7 @@ export function readLog(
   return db.query(
     `SELECT x.id, x.kind, x.facts, x.happened_at, x.happened_on::text AS happened_on, x.recorded_at, x.struck_reason,
             (SELECT p.printed_name FROM people p WHERE p.id = x.recorded_by) AS recorded_by_name,
+            ${knownOn('$1', 'x.happened_at')} AS known_on,
             count(*) OVER ()::int AS total
        FROM (${everything}) x
       ORDER BY x.happened_at DESC, x.recorded_at DESC, x.id DESC LIMIT $2 OFFSET $3`,

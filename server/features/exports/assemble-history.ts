@@ -83,14 +83,17 @@ export function describeEvent(facts: CustodyFacts, event: BalancedEvent): Histor
   if (!row) throw new Error(`event ${event.eventId} has no row`)
   const line = facts.lines.find((one) => one.count_entry_id === event.eventId)
   const transaction = facts.transactions.find((one) => one.id === line?.transaction_id)
+  // An estimate made on arrival has the instant of the transaction and no line of it
+  const entered =
+    transaction ?? facts.transactions.find((one) => one.happened_at.getTime() === row.happened_at.getTime())
   const site = siteOf(transaction)
   const place = (id: string | null) => (id === null ? null : (facts.enclosures.get(id) ?? null))
   return {
     eventId: event.eventId,
     kind: event.kind,
-    on: transaction?.happened_text ?? row.happened_on,
+    on: entered?.happened_text ?? row.happened_on,
     at: event.at,
-    exact: transaction ? transaction.happened_time !== null : true,
+    exact: entered ? entered.happened_time !== null : true,
     delta: event.delta,
     countAfter: event.countAfter,
     found: event.found ?? null,

@@ -21,6 +21,7 @@ import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { countText } from './animal-name.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
 import { sayDayOrTime } from './say-day-or-time.ts'
 import { animalListQuery } from './queries.ts'
 import type { AnimalListQuery } from './queries.ts'
@@ -86,7 +87,12 @@ function columnsOf(p: { zone: string; now: string; massUnit: string | undefined 
       narrow: 'short',
       sort: true,
       className: 'min-[601px]:pl-5',
-      cell: (row) => (row.since ? sayDayOrTime(row.since, p.zone, p.now) : ''),
+      cell: (row) =>
+        row.sinceKnownOn
+          ? sayDate(row.sinceKnownOn)
+          : row.since
+            ? sayDayOrTime(row.since, p.zone, p.now)
+            : '',
     },
     {
       id: 'weight',

@@ -14,14 +14,16 @@ import { animalLogQuery } from './queries.ts'
 export function logEntries(lines: readonly LogLine[], zone: string, today: string): LogEntry[] {
   let day = ''
   return lines.map((line) => {
-    const { date, time } = wallClockOf(line.happenedAt, zone)
+    const { date: placed, time } = wallClockOf(line.happenedAt, zone)
+    const date = line.knownOn ?? placed
     const heading = date === day ? undefined : date === today ? animalLogWords.today : sayDate(date)
     day = date
     return {
       key: `${line.kind} ${line.id}`,
       ...(heading === undefined ? {} : { day: heading }),
-      time: time.slice(0, 5),
-      instant: line.happenedAt,
+      // no time of day where only the date is known
+      time: line.knownOn === null ? time.slice(0, 5) : '',
+      instant: line.knownOn ?? line.happenedAt,
       what:
         line.struckReason === null ? (
           sayLogLine(line)

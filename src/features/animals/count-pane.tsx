@@ -7,7 +7,6 @@ import { countKindNames } from '../../../shared/messages/animals.ts'
 import { useMay } from '../../lib/may.ts'
 import { paths } from '../../lib/paths.ts'
 import { QueryStanding } from '../../lib/query-standing.tsx'
-import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
@@ -16,6 +15,7 @@ import { AdjustDialog, BirthsDialog, CountDialog } from './count-dialogs.tsx'
 import { MergeDialog } from './merge-dialog.tsx'
 import { countsQuery } from './queries.ts'
 import { SplitDialog } from './split-dialog.tsx'
+import { sayFactMoment } from './say-fact-moment.ts'
 import { strikeColumn } from './strike-column.tsx'
 import { StrikeDialog } from './strike-dialog.tsx'
 import type { ToStrike } from './strike-dialog.tsx'
@@ -113,7 +113,7 @@ function columnsOf(p: {
   onStrike: ((line: ToStrike) => void) | undefined
 }): TableColumn<Counts['lines'][number]>[] {
   return [
-    { id: 'when', heading: words.when, cell: (row) => sayMoment(row.happenedAt, p.zone, p.now) },
+    { id: 'when', heading: words.when, cell: (row) => sayFactMoment(row, p.zone, p.now) },
     {
       id: 'what',
       heading: words.what,

@@ -58,7 +58,11 @@ export function IdentityPane({ animal, zone }: { animal: Animal; zone: string })
             : words.bornUnknown}
         </dd>
         <dt>{words.arrived}</dt>
-        <dd>{animal.arrivedAt ? sayDate(facilityDateOf(animal.arrivedAt, zone)) : words.bornUnknown}</dd>
+        <dd>
+          {animal.arrivedAt
+            ? sayDate(animal.arrivedKnownOn ?? facilityDateOf(animal.arrivedAt, zone))
+            : words.bornUnknown}
+        </dd>
         <dt>{words.marks}</dt>
         <dd>
           {marks.length === 0 ? words.noMarks : null}

@@ -9,11 +9,11 @@ import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { useMay } from '../../lib/may.ts'
 import { paths } from '../../lib/paths.ts'
 import { QueryStanding } from '../../lib/query-standing.tsx'
-import { sayMoment } from '../../lib/say-moment.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
 import { movesQuery } from './queries.ts'
+import { sayFactMoment } from './say-fact-moment.ts'
 import { strikeColumn } from './strike-column.tsx'
 import { StrikeDialog } from './strike-dialog.tsx'
 import type { ToStrike } from './strike-dialog.tsx'
@@ -80,7 +80,7 @@ function columnsOf(p: {
   onStrike: ((line: ToStrike) => void) | undefined
 }): TableColumn<MoveEntry>[] {
   return [
-    { id: 'when', heading: words.when, cell: (row) => sayMoment(row.happenedAt, p.zone, p.now) },
+    { id: 'when', heading: words.when, cell: (row) => sayFactMoment(row, p.zone, p.now) },
     { id: 'from', heading: words.from, cell: (row) => placeLink(row.from) },
     { id: 'to', heading: words.to, cell: (row) => placeLink(row.to) },
     {

@@ -87,7 +87,7 @@ describe('the log of an animal', () => {
   })
 
   it('puts a heading where a day of the facility begins', () => {
-    const line = (id: string, happenedAt: string) => ({
+    const line = (id: string, happenedAt: string, knownOn: string | null = null) => ({
       id,
       kind: 'statement',
       facts: { basis: 'counted', low: 1 },
@@ -95,6 +95,7 @@ describe('the log of an animal', () => {
       happenedOn: happenedAt.slice(0, 10),
       recordedAt: happenedAt,
       recordedBy: 'Tamsin',
+      knownOn,
       struckReason: null,
     })
     const entries = logEntries(
@@ -103,6 +104,8 @@ describe('the log of an animal', () => {
         line('b', '2026-12-01T04:30:00Z'),
         line('c', '2026-12-01T03:30:00Z'),
         line('d', '2026-11-30T20:00:00Z'),
+        line('e', '2026-11-30T04:00:00Z', '2026-11-30'),
+        line('f', '2026-11-01T03:00:00Z', '2026-11'),
       ],
       'America/Halifax',
       '2026-12-01',
@@ -112,8 +115,11 @@ describe('the log of an animal', () => {
       undefined,
       `30${nbsp}Nov${nbsp}2026`,
       undefined,
+      undefined,
+      `Nov${nbsp}2026`,
     ])
-    expect(entries.map((entry) => entry.time)).toEqual(['09:00', '00:30', '23:30', '16:00'])
+    expect(entries.map((entry) => entry.time)).toEqual(['09:00', '00:30', '23:30', '16:00', '', ''])
+    expect(entries.at(-1)?.instant).toBe('2026-11')
   })
 })
 
