@@ -34,7 +34,7 @@ export const animalLogWords = defineMessages({
     `Mark recorded: ${p.mark} ${p.value}${p.place ? `, ${p.place}` : ''}.`,
   markEnded: (p: { mark: string; value: string; reason: string }) =>
     `${p.mark} ${p.value} no longer there: ${p.reason}.`,
-  quarantined: (p: { source: string; reason: string }) => `In quarantine, ${p.source}: ${p.reason}.`,
+  quarantined: (p: { source: string }) => `In quarantine: ${p.source}.`,
   heldStill: (p: { source: string; reason: string }) => `Held, no movement, ${p.source}: ${p.reason}.`,
   freed: (p: { source: string; reason: string }) => `Free to move again, ${p.source}: ${p.reason}.`,
   opened: (p: { what: string; role: string }) => `To be explained by a ${p.role}: ${p.what}`,

@@ -59,7 +59,7 @@ export const animalWords = defineMessages({
   bornKind: 'born',
   propagated: 'propagated',
   heldBy: (p: { source: string; reason: string }) => `Held, no movement: ${p.source}, ${p.reason}`,
-  quarantinedBy: (p: { source: string; reason: string }) => `In quarantine: ${p.source}, ${p.reason}`,
+  quarantinedBy: (p: { source: string }) => `In quarantine: ${p.source}`,
   gone: 'No longer in the house',
   sensitivities: 'Sensitive to',
   noSensitivities: 'A veterinarian has recorded nothing for this taxon.',

@@ -144,7 +144,8 @@ export function harbourLines(
   const x = beside - 12 < course.nowX && course.nowX < beside + 118 ? course.nowX + 14 : beside
   if (x + 118 > width) {
     const lead = { text: date, look: classNames('s-13 s-b', colour) }
-    return [{ ...foot, key: 'harbour', text: `${passageWords.earliestClearance}, ${toRun}`, lead }]
+    const text = view.flag === 'C' ? toRun : `${passageWords.earliestClearance}, ${toRun}`
+    return [{ ...foot, key: 'harbour', text, lead }]
   }
   const onLand = { x, anchor: 'start' as const, sizePx: 12, look: 's-12 s-2' }
   return [
