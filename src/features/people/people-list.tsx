@@ -32,7 +32,13 @@ function columnsOf(zone: string): TableColumn<PersonRow>[] {
         </Link>
       ),
     },
-    { id: 'email', heading: peopleWords.email, sort: true, className: '[overflow-wrap:anywhere]', cell: (row) => row.email },
+    {
+      id: 'email',
+      heading: peopleWords.email,
+      sort: true,
+      className: '[overflow-wrap:anywhere]',
+      cell: (row) => row.email,
+    },
     {
       id: 'roles',
       heading: peopleWords.roles,
