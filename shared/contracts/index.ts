@@ -25,6 +25,7 @@ import * as signing from './signing.contract.ts'
 import * as signIn from './sign-in.contract.ts'
 import * as today from './today.contract.ts'
 import * as water from './water.contract.ts'
+import * as waterCases from './water-cases.contract.ts'
 import * as waterMap from './water-map.contract.ts'
 import * as waterVolumes from './water-volumes.contract.ts'
 
@@ -55,6 +56,7 @@ const modules = [
   exports,
   protocols,
   quarantine,
+  waterCases,
   caseEvents,
   clearance,
   observations,

@@ -29,6 +29,10 @@ export const animalForms = defineMessages({
   weightRecorded: (p: { weight: string; animal: string }) => `${p.weight} recorded for ${p.animal}`,
 
   moveQuestion: (p: { animal: string }) => `Where is ${p.animal} moved?`,
+  restartsClock: (p: { number: string }) =>
+    `${p.number} is in quarantine in this water. An animal that comes in can start its clock again.`,
+  joinsOpenBatch: (p: { number: string }) =>
+    `${p.number} is in quarantine in this water, and its batch is still open: whoever belongs to it is entered in the case too.`,
   moveFrom: 'From',
   moveTo: 'To',
   moveReason: 'Why it is moved',

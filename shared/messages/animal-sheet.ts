@@ -60,6 +60,7 @@ export const animalWords = defineMessages({
   propagated: 'propagated',
   heldBy: (p: { source: string; reason: string }) => `Held, no movement: ${p.source}, ${p.reason}`,
   quarantinedBy: (p: { source: string }) => `In quarantine: ${p.source}`,
+  inWaterOf: (p: { numbers: string }) => `In water that is in quarantine: ${p.numbers}`,
   gone: 'No longer in the house',
   sensitivities: 'Sensitive to',
   noSensitivities: 'A veterinarian has recorded nothing for this taxon.',

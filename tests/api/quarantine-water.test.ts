@@ -105,6 +105,24 @@ describe('the water of a quarantine case', () => {
     expect((await move(guest, next, hall)).body.code).toBe('movement-locked')
   })
 
+  it('says which cases are in it before an animal is put there', async () => {
+    const one = await aCase(api)
+    const open = await aCase(api, { close: false })
+    const next = await anEnclosure(api, 'BESIDE', { boundary: 'Wing' })
+    const ask = async (enclosure: BuiltEnclosure) => {
+      const { agent } = await api.as('registrar')
+      return (await agent.get(`/api/enclosures/${enclosure.id}/cases`).expect(200)).body.rows
+    }
+    expect(await ask(one.enclosure)).toEqual([{ number: one.number, batchClosed: true }])
+    expect(await ask(open.enclosure)).toEqual([{ number: open.number, batchClosed: false }])
+    expect(await ask(next)).toEqual([])
+    await aValve(api, 'V-BESIDE', [one.enclosure.waterBodyId, next.waterBodyId])
+    expect(await ask(next)).toEqual([{ number: one.number, batchClosed: true }])
+    const { agent } = await api.as('registrar')
+    const nowhere = await agent.get(`/api/enclosures/${api.nextId()}/cases`)
+    expect([nowhere.status, nowhere.body.code]).toEqual([404, 'not-found'])
+  })
+
   it('is left freely by what was cleared in it', async () => {
     const one = await aCase(api)
     const guest = await resident(one.enclosure)

@@ -3,6 +3,8 @@ import { tmpdir } from 'node:os'
 import path from 'node:path'
 import type { Browser, Download, Page } from 'playwright-core'
 import { parse } from 'csv-parse/sync'
+import { aCase } from '../builders/a-case.ts'
+import type { BuiltCase } from '../builders/a-case.ts'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { aPlace, aStingray } from '../builders/a-collection.ts'
 import { anAcquisition, aParty, aPermit, newLine, pdfBytes } from '../builders/a-register.ts'
@@ -18,6 +20,7 @@ let app: ServedApp
 let tank: string
 let tankId: string
 let taxon: string
+let inCase: BuiltCase
 const folder = mkdtempSync(path.join(tmpdir(), 'pratique-register-'))
 const agreement = path.join(folder, 'Loan agreement LA-26-04.pdf')
 
@@ -29,6 +32,7 @@ beforeAll(async () => {
   app = await startServedApp()
   taxon = await aStingray(app)
   ;({ id: tankId, code: tank } = await aPlace(app))
+  inCase = await aCase(app)
   await aParty(app, 'Ledder Bay Marsh Trust')
   await aPermit(app, { permitNumber: 'NS-26-017', quantityAllowed: 20 })
   for (const { width } of [desk, phone]) await anOverUse(`NS-25-${String(width)}`)
@@ -102,7 +106,10 @@ describe.each([desk, phone])('the registrar at $width px', (size) => {
     await page.getByRole('radio', { name: 'Group', exact: true }).click()
     await page.getByLabel('Number alive').fill('24')
     await page.getByRole('radio', { name: 'Counted' }).click()
+    await choose(page, 'Into enclosure', inCase.enclosure.code)
+    await page.getByText(`${inCase.number} is in quarantine in this water.`).waitFor()
     await choose(page, 'Into enclosure', tank, new RegExp(tank))
+    await page.getByText(`${inCase.number} is in quarantine in this water.`).waitFor({ state: 'detached' })
     await page.getByRole('button', { name: 'Use a permit' }).click()
     await choose(page, 'Permit', 'NS-26-017', /NS-26-017/)
     await page.getByLabel('Animals under it').fill('24')

@@ -27,6 +27,7 @@ import { presentProtocol } from './protocols.present.ts'
 import { readProtocolVersions } from './protocols.reads.ts'
 import { isLive, readClocks } from './read-clocks.ts'
 import type { ClockFacts, WantedCases } from './read-clocks.ts'
+import { readCasesInWater } from './water-cases.ts'
 import { withholdFromRow } from './withhold-clinical.ts'
 import { mustBeSigned, readSignedEvent } from './read-signed-event.ts'
 
@@ -151,6 +152,9 @@ export function createQuarantineQueries(parts: QuarantineQueryParts) {
       const { block, clearance } = await readSignedEvent(parts.signing, head, event)
       return { caseId: id, block, clearance, status: clockOf(facts, head).status }
     },
+
+    /** Running cases in the water of an enclosure now. */
+    casesInWater: (enclosureId: string) => readCasesInWater(parts, db, enclosureId, clock.now()),
 
     async protocols(): Promise<ProtocolVersion[]> {
       return (await readProtocolVersions(db)).map(presentProtocol)

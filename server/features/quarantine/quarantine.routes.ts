@@ -1,5 +1,6 @@
 import * as events from '../../../shared/contracts/case-events.contract.ts'
 import * as contracts from '../../../shared/contracts/quarantine.contract.ts'
+import { listCasesInWater } from '../../../shared/contracts/water-cases.contract.ts'
 import * as protocols from '../../../shared/contracts/protocols.contract.ts'
 import type { Clock } from '../../platform/clock.ts'
 import { Problem } from '../../platform/http/problem.ts'
@@ -33,6 +34,7 @@ export function quarantineRoutes(parts: RouteParts): Route[] {
       return queries.protocol(await parts.protocols.confirm(context, params.code, version, body.reason))
     }),
     route(contracts.listCases, ({ query, context }) => queries.board(query, context.actor.roles)),
+    route(listCasesInWater, async ({ params }) => ({ rows: await queries.casesInWater(params.id) })),
     route(contracts.getCase, ({ params, query, context }) =>
       queries.caseOf(params.number, context.actor.roles, query.asOf),
     ),

@@ -2,7 +2,7 @@ import { Controller, useFormContext, useWatch } from 'react-hook-form'
 import { transactionFormWords as words } from '../../../shared/messages/register-sheet.ts'
 import { ChoiceField } from '../../ui/choice-field.tsx'
 import { TextField } from '../../ui/text-field.tsx'
-import { AnimalChooser, TaxonChooser } from '../animals/index.ts'
+import { AnimalChooser, TaxonChooser, WaterInQuarantine } from '../animals/index.ts'
 import { EnclosureChooser } from '../enclosures/index.ts'
 import { useFormField } from './form-field.ts'
 import { MoreAboutLine } from './more-about-line.tsx'
@@ -13,9 +13,9 @@ export function LineInFields({ index }: { index: number }) {
   const { control } = useFormContext<TransactionValues>()
   const { wrong, field } = useFormField()
   const at = `lines.${index}` as const
-  const [record, form, known] = useWatch({
+  const [record, form, known, enclosureId] = useWatch({
     control,
-    name: [`${at}.record`, `${at}.form`, `${at}.known`],
+    name: [`${at}.record`, `${at}.form`, `${at}.known`, `${at}.enclosureId`],
   })
   return (
     <div className="stack gap-3">
@@ -94,6 +94,7 @@ export function LineInFields({ index }: { index: number }) {
               />
             )}
           />
+          <WaterInQuarantine enclosureId={enclosureId} />
         </>
       )}
       <TextField

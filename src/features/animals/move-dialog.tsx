@@ -14,6 +14,7 @@ import { missingAnswer, MoveRuleFields, noAnswer, sentAnswer } from './move-rule
 import { useMoveAnimal } from './mutations.ts'
 import { useMoveAsks } from './use-move-asks.ts'
 import { RecordDialog, WhenField } from './record-dialog.tsx'
+import { WaterInQuarantine } from './water-in-quarantine.tsx'
 
 /** Moves the whole animal or group. A move that a rule forbids can still be recorded as having happened. */
 export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => void }) {
@@ -70,6 +71,7 @@ export function MoveDialog({ animal, onBack }: { animal: Animal; onBack: () => v
         onChange={setTo}
         wrong={refusal.at('/toEnclosureId')}
       />
+      <WaterInQuarantine enclosureId={to} own={animal.locks.map((lock) => lock.sourceLabel)} />
       <MoveRuleFields
         animal={animal}
         to={target?.code ?? ''}

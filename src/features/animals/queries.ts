@@ -9,6 +9,7 @@ import {
   listWeights,
 } from '../../../shared/contracts/animals.contract.ts'
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
+import { listCasesInWater } from '../../../shared/contracts/water-cases.contract.ts'
 import { api } from '../../lib/api-client.ts'
 
 /** Everything about animals hangs below this key: whatever is recorded refreshes all of it. */
@@ -45,6 +46,14 @@ export const countsQuery = (accession: string) =>
   queryOptions({
     queryKey: [...animalsKey, 'counts', accession],
     queryFn: ({ signal }) => api(listCounts, { params: { accession }, signal }),
+  })
+
+/** Below the key of quarantine: what is recorded of a case refreshes it. */
+export const casesInWaterQuery = (enclosureId: string) =>
+  queryOptions({
+    queryKey: ['quarantine', 'in-water', enclosureId],
+    queryFn: async ({ signal }) =>
+      (await api(listCasesInWater, { params: { id: enclosureId }, signal })).rows,
   })
 
 const logPage = 40

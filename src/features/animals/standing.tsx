@@ -2,6 +2,7 @@ import type { Animal, AnimalRow } from '../../../shared/contracts/animals.contra
 import { animalWords as words } from '../../../shared/messages/animal-sheet.ts'
 import { FlagWords } from '../../ui/flag-mark.tsx'
 import { Tag } from '../../ui/tag.tsx'
+import { InWaterOfCases } from './water-in-quarantine.tsx'
 
 /** How an animal stands, in one cell of a list: quarantine, hold, and what waits to be explained. */
 export function Standing({ animal }: { animal: Pick<AnimalRow, 'lock' | 'openDiscrepancies'> }) {
@@ -22,7 +23,7 @@ export function SheetFlag({ animal }: { animal: Animal }) {
   if (animal.place === null) return <Tag>{words.gone}</Tag>
   const held = animal.locks.find((lock) => lock.kind === 'all')
   const lock = held ?? animal.locks[0]
-  if (!lock) return null
+  if (!lock) return <InWaterOfCases enclosureId={animal.place.id} />
   const given = { source: lock.sourceLabel, reason: lock.reason }
   return (
     <FlagWords flag={held ? 'L' : 'Q'}>{held ? words.heldBy(given) : words.quarantinedBy(given)}</FlagWords>
