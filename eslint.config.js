@@ -48,7 +48,7 @@ export function importRules(root) {
         'import-x/resolver-next': [importX.createNodeResolver({ extensions })],
       },
       rules: {
-        'import-x/no-cycle': 'error',
+        'import-x/no-cycle': ['error', { ignoreExternal: true }],
         '@typescript-eslint/consistent-type-imports': 'error',
         'import-x/no-restricted-paths': ['error', { basePath: root, zones }],
       },
