@@ -127,6 +127,12 @@ export const orderPaper = defineMessages({
   givenHeading: 'Given',
   alone: (p: { key: string; calculated: string }) =>
     `Dose ${p.key}: no second person calculated the amount. ${p.calculated}`,
+  /** Of one that is recorded: the kind of the record stands beside what was weighed. */
+  amountAs: (p: { amount: string; kind: string }) => (p.amount === '' ? p.kind : `${p.amount}, ${p.kind}`),
+  noSecond: 'none',
+  doseNote: (p: { key: string; at: string; text: string }) => `Dose ${p.key}, ${p.at}: ${p.text}`,
+  stoppedEarly: (p: { at: string; seen: string }) =>
+    `stopped before its time, ${p.at}.${p.seen === '' ? '' : ` Seen: ${p.seen}`}`,
   dose: 'Dose',
   due: 'Due',
   second: 'Second calculation',

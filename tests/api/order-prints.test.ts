@@ -88,19 +88,23 @@ describe('a printed order that is looked up', () => {
       doses: 2,
       intervalHours: 48,
     })
-    const { agent } = await api.as('technician')
-    await agent
-      .post(`/api/orders/${number}/doses/1/record`)
-      .send({
-        id: api.nextId(),
-        kind: 'recorded',
-        happenedAt: '2026-12-01T18:20:00Z',
-        amount: { value: '4.36', unit: 'g' },
-        lotId: fields.lotId,
-      })
-      .expect(201)
-    const table = layoutOf(await printed(`/api/orders/${number}/print`)).split(/Given\n/)[1] ?? ''
-    expect(table).toMatch(/^ *1 .*recorded as given +4\.36 g +1 Dec 2026, .*Test/m)
+    const record = async (role: 'keeper' | 'technician', value: string) => {
+      const { agent } = await api.as(role)
+      const given = { kind: 'recorded', happenedAt: '2026-12-01T18:20:00Z', lotId: fields.lotId }
+      await agent
+        .post(`/api/orders/${number}/doses/1/record`)
+        .send({ id: api.nextId(), ...given, amount: { value, unit: 'g' } })
+        .expect(201)
+    }
+    await record('keeper', '43.6')
+    await record('technician', '4.36')
+    const bytes = await printed(`/api/orders/${number}/print`)
+    const table = layoutOf(bytes).split(/Given\n/)[1] ?? ''
+    // a second record of the same dose hides nothing of the first, and nobody calculated either of them again
+    expect(table).toMatch(/^ *1 .*none +43\.6 g, .* 1 Dec 2026/m)
+    expect(table).toMatch(/^ *1 .*none +4\.36 g, .* 1 Dec 2026/m)
+    const text = textOf(bytes).replace(/\s+/g, ' ')
+    expect(text).toMatch(/Dose 1, 1 Dec 2026, 14:20: [^.]*43\.6 g/)
     expect(table).toMatch(/^ *2 .* g +g *$/m)
   })
 

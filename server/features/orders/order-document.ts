@@ -192,14 +192,13 @@ function animalsBlock({ content }: OrderPaper): DocumentBlock {
 
 /** A dose that is recorded already has no box left for the pen: it might be given again. */
 function recordedCells(dose: RecordedDoseRow, zone: string): TableCell[] {
-  const { amount_entered_value: amount, amount_entered_unit: unit, ended_at } = dose
+  const { amount_entered_value: value, amount_entered_unit: unit, ended_at } = dose
+  const amount = value === null || unit === null ? '' : formatDose(value, unit as UnitCode).text
   return [
-    doseKindNames[dose.kind],
-    !dose.is_as_written
-      ? doseWords.notAsRecorded
-      : amount === null || unit === null
-        ? ''
-        : formatDose(amount, unit as UnitCode).text,
+    dose.second_by ?? orderPaper.noSecond,
+    dose.is_as_written
+      ? orderPaper.amountAs({ amount, kind: doseKindNames[dose.kind] })
+      : doseWords.notAsRecorded,
     sayInstant(dose.happened_at.toISOString(), zone),
     ended_at === null ? '' : sayInstant(ended_at.toISOString(), zone),
     dose.by_name ?? '',
@@ -228,13 +227,35 @@ function givenBlock({ content, block, recorded }: OrderPaper): DocumentBlock {
       { head: orderPaper.ended, share: 1.1 },
       { head: orderPaper.by, share: 1.4 },
     ],
-    rows: planned.map(({ key, dueAt }) => {
-      const known = recorded.find((dose) => dose.dose_key === key)
+    // every record of a dose has its line: a second one must not hide the first
+    rows: planned.flatMap(({ key, dueAt }) => {
+      const known = recorded.filter((dose) => dose.dose_key === key).reverse()
       const forThePen = [{ pen, unit }, { pen, unit }, { pen }, { pen }, { pen }]
-      return [key, sayInstant(dueAt, block.zone), ...(known ? recordedCells(known, block.zone) : forThePen)]
+      const cells = known.length === 0 ? [forThePen] : known.map((dose) => recordedCells(dose, block.zone))
+      return cells.map((own) => [key, sayInstant(dueAt, block.zone), ...own])
     }),
     emptyText: orderWords.noVolume,
   }
+}
+
+/** What a line of the table cannot say: what was against the rules, and that a bath was stopped before its time. */
+function noteBlocks({ recorded, block }: OrderPaper): DocumentBlock[] {
+  return [...recorded].reverse().flatMap((dose) => {
+    const at = sayInstant(dose.happened_at.toISOString(), block.zone)
+    const exceptions = JSON.parse(dose.exceptions_text) as { code: string; text: string }[]
+    const texts = exceptions
+      // no figure is printed of a record that somebody changed
+      .filter(({ code }) => dose.is_as_written || code !== 'amount-differs')
+      .map(({ text }) => text)
+    if (dose.stopped_at !== null) {
+      const stopped = sayInstant(dose.stopped_at.toISOString(), block.zone)
+      texts.push(orderPaper.stoppedEarly({ at: stopped, seen: dose.stopped_seen ?? '' }))
+    }
+    return texts.map((text): DocumentBlock => {
+      const note = orderPaper.doseNote({ key: dose.dose_key, at, text })
+      return { kind: 'paragraph', text: [{ text: note, bold: true }] }
+    })
+  })
 }
 
 /** Doses that no second person calculated. */
@@ -282,6 +303,7 @@ function statements(paper: OrderPaper): DocumentBlock[] {
     animalsBlock(paper),
     { kind: 'heading', text: orderPaper.givenHeading },
     givenBlock(paper),
+    ...noteBlocks(paper),
     ...aloneBlocks(paper),
   ]
 }

@@ -200,6 +200,12 @@ export interface RecordedDoseRow {
   ended_at: Date | null
   /** When somebody stopped its bath before the time was over. */
   stopped_at: Date | null
+  /** What was seen when it was stopped. */
+  stopped_seen: string | null
+  /** What was against the rules, as JSON of codes and sentences. */
+  exceptions_text: string
+  /** Who calculated it a second time; null where nobody did. */
+  second_by: string | null
   /** Who calculated it a second time after themselves, and how many minutes later; null where another person did. */
   alone_by: string | null
   alone_after_minutes: number | null
@@ -213,6 +219,11 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
             p.printed_name AS by_name,
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped') AS stopped_at,
+            (SELECT s.seen FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped'
+              ORDER BY s.happened_at DESC LIMIT 1) AS stopped_seen,
+            d.exceptions_text,
+            (SELECT r.printed_name FROM dose_calculations c JOIN people r ON r.id = c.recorded_by
+              WHERE c.id = d.second_calculation_id) AS second_by,
             a.by_name AS alone_by, a.minutes AS alone_after_minutes
        FROM live_doses d
        JOIN orders_of_doses w ON w.dose_id = d.id
