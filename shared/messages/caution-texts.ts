@@ -7,6 +7,10 @@ type Texts = { [Code in CautionCode]: (params: Said<CautionParams[Code]>) => str
 
 const minutes = (count: number) => duration(count)
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
+/** Which dose comes after those that count already. */
+const nextOf = (p: { given: number; planned: number }) =>
+  p.given < p.planned ? `the next is dose ${p.given + 1}` : 'none is left to come'
+
 const days = (count: number) => counted(count, 'day', 'days')
 
 function duration(inMinutes: number): string {
@@ -328,9 +332,9 @@ export const cautionTexts = defineMessages({
   'plan-long': (p) =>
     `From the first dose to the last it is ${days(p.days)}, more than ${days(p.limitDays)}. Animals and water will not be as they are judged now.`,
   'doses-carried': (p) =>
-    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given already, the last at ${p.lastAt}. They count: the next is dose ${p.given + 1}.`,
+    `${p.given} of ${counted(p.planned, 'planned dose', 'planned doses')} were given already, the last at ${p.lastAt}. They count: ${nextOf(p)}.`,
   'plan-counts-given': (p) =>
-    `The plan begins at ${p.startsAt}, and ${counted(p.given, 'dose was', 'doses were')} given before, the last at ${p.lastAt}. They count as the first of the ${counted(p.planned, 'planned dose', 'planned doses')}: the next is dose ${p.given + 1}.`,
+    `The plan begins at ${p.startsAt}, and ${counted(p.given, 'dose was', 'doses were')} given before, the last at ${p.lastAt}. They count as the first of the ${counted(p.planned, 'planned dose', 'planned doses')}: ${nextOf(p)}.`,
   'test-missing': (p) => `No reading of ${p.reading}. It has to be at most ${minutes(p.maxAgeMinutes)} old.`,
   'test-old': (p) =>
     `The reading of ${p.reading} of ${p.readAt} is ${minutes(p.ageMinutes)} old. It counts for ${minutes(p.maxAgeMinutes)}.`,

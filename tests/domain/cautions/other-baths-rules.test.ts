@@ -86,6 +86,8 @@ describe('R29, R48: what is in the water already, and when', () => {
     expect(plan(0, 0, null, 1081)).toEqual(['warning plan-long'])
     expect(plan(-30, 1, -29)).toEqual(['note doses-carried'])
     expect(plan(2, 1, -29)).toEqual(['warning plan-counts-given'])
+    // the first dose itself, given within its window but before its minute
+    expect(plan(3, 1, -1)).toEqual(['note doses-carried'])
   })
 })
 

@@ -28,7 +28,7 @@ export const plannedTime = defineRule({
     if (startsAt === null) return []
     const found: CautionFinding[] = []
     const resolvedBy = ['check-start'] as const
-    const { lateHours } = doseWindow(spacing?.intervalHours || hoursPerDay)
+    const { earlyHours, lateHours } = doseWindow(spacing?.intervalHours || hoursPerDay)
     const given = spacing?.givenDoses ?? 0
     if (given === 0 && compareInstants(addHours(startsAt, lateHours), facts.at) < 0)
       found.push({ code: 'start-past', level: 'warning', params: { startsAt }, resolvedBy })
@@ -50,8 +50,8 @@ export const plannedTime = defineRule({
     const lastAt = spacing?.lastGivenAt ?? null
     if (given > 0 && spacing && lastAt !== null) {
       const params = { given, planned: spacing.plannedDoses, lastAt, startsAt }
-      // a plan that begins after what was given looks like one of new doses, and is not
-      if (compareInstants(startsAt, lastAt) > 0)
+      // a plan that begins after what was given looks like one of new doses, and is not; its own first may be early
+      if (compareInstants(addHours(startsAt, -earlyHours), lastAt) > 0)
         found.push({ code: 'plan-counts-given', level: 'warning', params, resolvedBy })
       else found.push({ code: 'doses-carried', level: 'note', params, resolvedBy })
     }
