@@ -7,11 +7,11 @@ type Texts = { [Code in CautionCode]: (params: Said<CautionParams[Code]>) => str
 
 const minutes = (count: number) => duration(count)
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
+const days = (count: number) => counted(count, 'day', 'days')
+
 /** Which dose comes after those that count already. */
 const nextOf = (p: { given: number; planned: number }) =>
   p.given < p.planned ? `the next is dose ${p.given + 1}` : 'none is left to come'
-
-const days = (count: number) => counted(count, 'day', 'days')
 
 function duration(inMinutes: number): string {
   if (inMinutes < 120) return counted(inMinutes, 'minute', 'minutes')

@@ -1,4 +1,5 @@
 import type { History, HistoryEvent, HistoryOrigin } from '../contracts/exports.contract.ts'
+import { isDeathKind } from '../domain/ledger/count-entry.ts'
 import { birthKindNames, historyWords as words, portTitles } from './history.ts'
 import { sourceCodeNames } from './register-kinds.ts'
 import { sayDate, sayTime } from './say-date.ts'
@@ -28,7 +29,6 @@ export function sayEventTitle(event: HistoryEvent): string {
 export function sayEventDetails(event: HistoryEvent): string[] {
   const { found, sourceCode } = event
   const isMove = event.kind === 'move'
-  const isDeath = event.kind === 'death' || event.kind === 'euthanasia'
   return [
     found === null
       ? null
@@ -40,7 +40,7 @@ export function sayEventDetails(event: HistoryEvent): string[] {
       : words.ofAnimals({ delta: event.delta, after: event.countAfter }),
     event.from === null || isMove
       ? null
-      : words[isDeath ? 'diedIn' : 'leftFrom']({ place: sayPlace(event.from) ?? '' }),
+      : words[isDeathKind(event.kind) ? 'diedIn' : 'leftFrom']({ place: sayPlace(event.from) ?? '' }),
     event.to === null || isMove ? null : words.placedAt({ place: sayPlace(event.to) ?? '' }),
     sitePhrase(event.site),
     event.transaction === null ? null : words.transaction({ number: event.transaction }),

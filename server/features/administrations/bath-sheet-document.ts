@@ -12,8 +12,10 @@ import { bathPaper } from '../../../shared/messages/bath-paper.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
+import { restInTheWay, sayObstacle } from '../../../shared/messages/in-the-way.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
 import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { workingBlock } from '../../platform/pdf/working-block.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
@@ -145,9 +147,7 @@ function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
   }
 }
 
-const saidAsObstacle = ({ title, text }: SheetCaution) => `${title}. ${text}`
-const standsInTheWay = (sheet: BathSheet, caution: SheetCaution) =>
-  sheet.why.includes(saidAsObstacle(caution))
+const standsInTheWay = (sheet: BathSheet, caution: SheetCaution) => sheet.why.includes(sayObstacle(caution))
 
 const cautionLine = ({ title, text }: SheetCaution) => [
   { text: `${title}.`, bold: true },
@@ -179,27 +179,20 @@ function cautionBlocks(cautions: readonly SheetCaution[]): DocumentBlock[] {
 
 /** What stands in the way; a stop among it in its own look, and not a second time below. */
 function obstacleBlocks(sheet: BathSheet): DocumentBlock[] {
-  const stops = sheet.cautions.filter((caution) => standsInTheWay(sheet, caution))
-  const said = new Set(stops.map(saidAsObstacle))
   return [
-    ...sheet.why
-      .filter((text) => !said.has(text))
-      .map((text): DocumentBlock => ({ kind: 'paragraph', text: [{ text, bold: true }] })),
-    ...cautionBlocks(stops),
+    ...restInTheWay(sheet).map((text): DocumentBlock => ({
+      kind: 'paragraph',
+      text: [{ text, bold: true }],
+    })),
+    ...cautionBlocks(sheet.cautions.filter((caution) => standsInTheWay(sheet, caution))),
   ]
 }
 
 /** Every line that the screen shows, and what the balance makes of the last. */
 function workingBlocks({ working, roundingText }: BathSheet): DocumentBlock[] {
   if (working.length === 0) return []
-  const lines = working.map((line, i) => ({
-    what: line.label,
-    formula: line.shown,
-    result: line.result,
-    total: i === working.length - 1,
-  }))
   return [
-    { kind: 'working', lines },
+    workingBlock(working),
     ...(roundingText === null ? [] : [{ kind: 'paragraph' as const, text: roundingText }]),
   ]
 }

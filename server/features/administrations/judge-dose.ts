@@ -8,6 +8,7 @@ import { overrideStands } from '../../../shared/domain/orders/dose-override.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
+import { sayObstacle } from '../../../shared/messages/in-the-way.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
 import { saidAmount } from '../orders/index.ts'
@@ -157,7 +158,7 @@ export function obstacles(
   const zone = judgement?.facts.zone ?? 'UTC'
   for (const caution of answer?.cautions ?? [])
     if (caution.level === 'stop' && !answeredStop(situation, caution))
-      why.push(`${sayCaution(caution, zone).title}. ${sayCaution(caution, zone).text}`)
+      why.push(sayObstacle(sayCaution(caution, zone)))
   if (needsSecond(situation)) {
     const first = firstOf(calculations)
     const second = secondOf(calculations)

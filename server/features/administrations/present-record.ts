@@ -1,4 +1,8 @@
 import type { RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import {
+  amountDiffers,
+  exceptionsWithoutFigures,
+} from '../../../shared/domain/dose/exceptions-without-figures.ts'
 import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
@@ -91,9 +95,9 @@ const notAsRecorded: RecordedDose['exceptions'][number] = {
 /** What the record breaks; an amount in the words of it is left out with the others. */
 function saidExceptions(row: DoseReadRow, leftOut: boolean): RecordedDose['exceptions'] {
   const found = JSON.parse(row.exceptions_text) as RecordedDose['exceptions']
-  if (!row.is_as_written) return [notAsRecorded, ...found.filter(({ code }) => code !== 'amount-differs')]
+  if (!row.is_as_written) return [notAsRecorded, ...exceptionsWithoutFigures(found)]
   if (!leftOut) return found
-  return found.map((one) => (one.code === 'amount-differs' ? { ...one, text: doseWords.amountLeftOut } : one))
+  return found.map((one) => (one.code === amountDiffers ? { ...one, text: doseWords.amountLeftOut } : one))
 }
 
 function presentStop(row: DoseReadRow, reader: Reader, stop: OtherStop): NonNullable<RecordedDose['stop']> {

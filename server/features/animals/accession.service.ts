@@ -4,7 +4,7 @@ import type {
   LifeStage,
   Sex,
 } from '../../../shared/domain/animals/description.ts'
-import { countKinds } from '../../../shared/domain/ledger/count-entry.ts'
+import { countKinds, isDeathKind } from '../../../shared/domain/ledger/count-entry.ts'
 import type { CountKind } from '../../../shared/domain/ledger/count-entry.ts'
 import { animalRefusals } from '../../../shared/messages/animal-refusals.ts'
 import { isRepeated } from '../../platform/database/rows.ts'
@@ -287,7 +287,7 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
         },
       })
       // A death is a death, whoever records it: quarantine and the chart find it where all deaths are
-      if (given.kind === 'death' || given.kind === 'euthanasia')
+      if (isDeathKind(given.kind))
         await repository.insertDeath(tx, {
           id: parts.ids.next(),
           animalId: animal.id,

@@ -4,6 +4,7 @@ import type { Db } from '../../platform/database/db.ts'
 import { happenedBy } from '../../platform/database/happened-by.ts'
 import { containing } from '../../platform/database/like.ts'
 import { knownOn } from './known-on.ts'
+import { lockStands } from './lock-stands.ts'
 
 /** An animal or group as it stood at an instant. */
 export interface AnimalReadRow {
@@ -121,9 +122,7 @@ const asOf = `
  * shown, since every lift is held against the record behind it.
  */
 const lockOf = `coalesce((
-  SELECT min(k.kind) FROM movement_locks k
-   WHERE k.animal_id = r.id AND ${happenedBy('k', '$1')}
-     AND NOT EXISTS (SELECT 1 FROM standing_lock_lifts f WHERE f.lock_id = k.id AND ${happenedBy('f', '$1')})), 'none')`
+  SELECT min(k.kind) FROM movement_locks k WHERE k.animal_id = r.id AND ${lockStands('k', '$1')}), 'none')`
 
 /** Animals and groups at an instant, by whatever filter; `total` of each row counts all that fit. */
 export async function readAnimals(db: Db, filter: AnimalsFilter): Promise<AnimalReadRow[]> {

@@ -6,8 +6,8 @@ import type {
   IdentifierKind,
 } from '../../../shared/domain/animals/description.ts'
 import type { Db } from '../../platform/database/db.ts'
-import { happenedBy } from '../../platform/database/happened-by.ts'
 import { knownOn } from './known-on.ts'
+import { lockStands } from './lock-stands.ts'
 
 /** The times of a fact and its recorder's name, as every read here gives them. */
 export interface FactRow {
@@ -189,9 +189,7 @@ export interface LockReadRow {
 const locksInForce = (of: 'animal_id' | 'source_id') => `
   SELECT k.id, k.animal_id, k.kind, k.source_kind, k.source_id, k.source_label, k.reason, k.happened_at
     FROM movement_locks k
-   WHERE k.${of} = ANY ($1) AND ${happenedBy('k', '$2')}
-     AND NOT EXISTS (SELECT 1 FROM standing_lock_lifts f
-                      WHERE f.lock_id = k.id AND ${happenedBy('f', '$2')})
+   WHERE k.${of} = ANY ($1) AND ${lockStands('k', '$2')}
    ORDER BY k.happened_at, k.id`
 
 /** Locks of some animals in force at an instant. */

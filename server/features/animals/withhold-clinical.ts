@@ -6,6 +6,7 @@ import type {
   LogLine,
   WeightEntry,
 } from '../../../shared/contracts/animals.contract.ts'
+import { isDeathKind } from '../../../shared/domain/ledger/count-entry.ts'
 import { clinicalWords } from '../../../shared/messages/quarantine-records.ts'
 
 const { withheld } = clinicalWords
@@ -31,8 +32,10 @@ export function withholdFromWeight(weight: WeightEntry): WeightEntry {
 
 /** A line of the count ledger; one that goes with a struck-out death repeats the reason. */
 export function withholdFromCountLine(line: CountLine): CountLine {
-  const isOfDeath = line.kind === 'death' || line.kind === 'euthanasia'
-  return { ...line, struck: line.struck && isOfDeath ? { ...line.struck, reason: withheld } : line.struck }
+  return {
+    ...line,
+    struck: line.struck && isDeathKind(line.kind) ? { ...line.struck, reason: withheld } : line.struck,
+  }
 }
 
 /**

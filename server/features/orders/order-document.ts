@@ -6,22 +6,23 @@ import type {
 } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import { exceptionsWithoutFigures } from '../../../shared/domain/dose/exceptions-without-figures.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { formatUnrounded } from '../../../shared/domain/quantities/format-unrounded.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
-import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
+import { workingBlock } from '../../platform/pdf/working-block.ts'
 import type { SignedOrder } from './order-content.ts'
 import type { RecordedDoseRow } from './orders.reads.ts'
 import { sayTreated } from './say-order.ts'
+import { sayRounding } from './say-rounding.ts'
 
 export interface OrderPaper {
   /** What was signed; the columns beside it where the text was changed. */
@@ -126,26 +127,11 @@ function particulars({ content, block }: OrderPaper): DocumentBlock {
   return { kind: 'grid', entries }
 }
 
-function workingBlock({ content }: OrderPaper): DocumentBlock {
-  const last = content.working.length - 1
-  const lines = content.working.map((line, i) => ({
-    what: line.label,
-    formula: line.shown,
-    result: line.result,
-    total: i === last,
-  }))
-  return { kind: 'working', lines }
-}
-
 /** From the last line of the working to what is weighed, in the words of the screen. */
 function roundingBlock({ content: { amount, fields } }: OrderPaper): DocumentBlock[] {
   if (!amount.measured || !fields.division) return []
-  const text = orderViewWords.rounded({
-    unrounded: formatUnrounded(amount.unrounded, amount.unroundedUnit as UnitCode).text,
-    division: formatDose(fields.division.value, fields.division.unit as UnitCode).text,
-    amount: amount.text,
-  })
-  return [{ kind: 'paragraph', text }]
+  const unrounded = { value: amount.unrounded, unit: amount.unroundedUnit as UnitCode }
+  return [{ kind: 'paragraph', text: sayRounding(unrounded, fields.division, amount.text) }]
 }
 
 function cautionBlocks({ content, block }: OrderPaper): DocumentBlock[] {
@@ -242,11 +228,8 @@ function givenBlock({ content, block, recorded }: OrderPaper): DocumentBlock {
 function noteBlocks({ recorded, block }: OrderPaper): DocumentBlock[] {
   return [...recorded].reverse().flatMap((dose) => {
     const at = sayInstant(dose.happened_at.toISOString(), block.zone)
-    const exceptions = JSON.parse(dose.exceptions_text) as { code: string; text: string }[]
-    const texts = exceptions
-      // no figure is printed of a record that somebody changed
-      .filter(({ code }) => dose.is_as_written || code !== 'amount-differs')
-      .map(({ text }) => text)
+    const found = JSON.parse(dose.exceptions_text) as { code: string; text: string }[]
+    const texts = (dose.is_as_written ? found : exceptionsWithoutFigures(found)).map(({ text }) => text)
     if (dose.stopped_at !== null) {
       const stopped = sayInstant(dose.stopped_at.toISOString(), block.zone)
       texts.push(orderPaper.stoppedEarly({ at: stopped, seen: dose.stopped_seen ?? '' }))
@@ -260,7 +243,7 @@ function noteBlocks({ recorded, block }: OrderPaper): DocumentBlock[] {
 
 /** Doses that no second person calculated. */
 const aloneBlocks = ({ recorded }: OrderPaper): DocumentBlock[] =>
-  recorded.flatMap(({ dose_key: key, alone_by: by, alone_after_minutes: minutes }): DocumentBlock[] =>
+  recorded.flatMap(({ dose_key: key, second_by: by, alone_after_minutes: minutes }): DocumentBlock[] =>
     by === null || minutes === null
       ? []
       : [
@@ -292,7 +275,7 @@ function statements(paper: OrderPaper): DocumentBlock[] {
       }),
     },
     { kind: 'heading', text: orderPaper.workingHeading },
-    workingBlock(paper),
+    workingBlock(content.working),
     ...roundingBlock(paper),
     { kind: 'heading', text: orderPaper.conditionsHeading },
     { kind: 'conditions', columns: 2, items: content.conditions.map((condition) => condition.text) },

@@ -206,8 +206,7 @@ export interface RecordedDoseRow {
   exceptions_text: string
   /** Who calculated it a second time; null where nobody did. */
   second_by: string | null
-  /** Who calculated it a second time after themselves, and how many minutes later; null where another person did. */
-  alone_by: string | null
+  /** How many minutes after their own first calculation; null where another person had done that. */
   alone_after_minutes: number | null
 }
 
@@ -218,26 +217,24 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
             row_is_as_written('doses', d.id::text) AS is_as_written,
             p.printed_name AS by_name,
             (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id) AS ended_at,
-            (SELECT max(s.happened_at) FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped') AS stopped_at,
-            (SELECT s.seen FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped'
-              ORDER BY s.happened_at DESC LIMIT 1) AS stopped_seen,
-            d.exceptions_text,
-            (SELECT r.printed_name FROM dose_calculations c JOIN people r ON r.id = c.recorded_by
-              WHERE c.id = d.second_calculation_id) AS second_by,
-            a.by_name AS alone_by, a.minutes AS alone_after_minutes
+            t.happened_at AS stopped_at, t.seen AS stopped_seen, d.exceptions_text,
+            c.by_name AS second_by, c.alone_after_minutes
        FROM live_doses d
        JOIN orders_of_doses w ON w.dose_id = d.id
        LEFT JOIN people p ON p.id = d.recorded_by
        LEFT JOIN LATERAL (
+         SELECT s.happened_at, s.seen FROM live_bath_stops s
+          WHERE s.dose_id = d.id AND s.cause = 'stopped' ORDER BY s.happened_at DESC LIMIT 1) t ON true
+       LEFT JOIN LATERAL (
          SELECT r.printed_name AS by_name,
-                floor(extract(epoch FROM c.recorded_at - f.recorded_at) / 60)::int AS minutes
-           FROM dose_calculations c
-           JOIN LATERAL (SELECT g.recorded_at, g.recorded_by FROM dose_calculations g
-                          WHERE g.order_version_id = c.order_version_id AND g.dose_key = c.dose_key
-                            AND g.part = 'first' AND g.recorded_at <= c.recorded_at
-                          ORDER BY g.recorded_at DESC, g.id DESC LIMIT 1) f ON f.recorded_by = c.recorded_by
-           JOIN people r ON r.id = c.recorded_by
-          WHERE c.id = d.second_calculation_id) a ON true
+                floor(extract(epoch FROM x.recorded_at - f.recorded_at) / 60)::int AS alone_after_minutes
+           FROM dose_calculations x
+           JOIN people r ON r.id = x.recorded_by
+           LEFT JOIN LATERAL (SELECT g.recorded_at, g.recorded_by FROM dose_calculations g
+                               WHERE g.order_version_id = x.order_version_id AND g.dose_key = x.dose_key
+                                 AND g.part = 'first' AND g.recorded_at <= x.recorded_at
+                               ORDER BY g.recorded_at DESC, g.id DESC LIMIT 1) f ON f.recorded_by = x.recorded_by
+          WHERE x.id = d.second_calculation_id) c ON true
       WHERE w.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
     [orderId],
   )

@@ -37,6 +37,9 @@ export const countKinds = {
 
 export type CountKind = keyof typeof countKinds
 
+/** Whether animals were lost by dying, of themselves or by a hand. */
+export const isDeathKind = (kind: string): boolean => kind === 'death' || kind === 'euthanasia'
+
 /** One line of a group's count ledger. Never changed; a correction is a voided line and a new one. */
 export interface CountEntry {
   entryId: string

@@ -1,3 +1,4 @@
+import { isDeathKind } from '../ledger/count-entry.ts'
 import type { CountEntry, CountKind } from '../ledger/count-entry.ts'
 import type { CountStatement } from '../ledger/compute-group-count.ts'
 import { inTimeOrder } from '../ledger/list-running-counts.ts'
@@ -63,7 +64,7 @@ export function listCustody(
       at: entry.at,
       recordedAt: entry.recordedAt,
       delta: entry.delta,
-      fromEnclosureId: move?.fromEnclosureId ?? (isDeath(entry) ? placeAt(moves, entry.at) : null),
+      fromEnclosureId: move?.fromEnclosureId ?? (isDeathKind(entry.kind) ? placeAt(moves, entry.at) : null),
       toEnclosureId: move?.toEnclosureId ?? null,
       transferId: entry.transferId,
       voided: entry.voided ?? false,
@@ -92,8 +93,6 @@ export function listCustody(
   })
   return [...counts, ...moved, ...looked].sort(inOrder)
 }
-
-const isDeath = ({ kind }: CountEntry) => kind === 'death' || kind === 'euthanasia'
 
 /**
  * Where those stood that were lost at an instant: where the last move that stands, at it or before, had brought them;

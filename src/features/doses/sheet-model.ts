@@ -141,12 +141,6 @@ export function amountUnits(sheet: Pick<BathSheet, 'amountNow' | 'form'>): strin
   return own === undefined ? usual : [own, ...usual.filter((unit) => unit !== own)]
 }
 
-/** What stands in the way and is said nowhere else on the sheet: neither by a step nor by a caution. */
-export function restInTheWay(sheet: BathSheet): string[] {
-  const said = new Set(sheet.cautions.map(({ title, text }) => `${title}. ${text}`))
-  return sheet.why.filter((why) => !said.has(why))
-}
-
 /** Whether somebody else may act on this dose at any moment: a second person who calculates, whoever stops the bath. */
 export function othersMayAct(sheet: BathSheet): boolean {
   return (

@@ -2,6 +2,7 @@ import { useState } from 'react'
 import { Plus, WifiOff } from 'lucide-react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words, timerWords } from '../../../shared/messages/doses-screens.ts'
+import { restInTheWay } from '../../../shared/messages/in-the-way.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { useUnsent } from '../../lib/stop-entries.ts'
@@ -23,16 +24,7 @@ import { RecordDialog } from './record-dialog.tsx'
 import { RecordedDoses } from './recorded-doses.tsx'
 import { RunningSteps, RunningTime } from './running-bath.tsx'
 import { OtherBaths } from './other-baths.tsx'
-import {
-  bathOf,
-  lotToOpen,
-  nextAct,
-  openRecord,
-  openSteps,
-  otherBaths,
-  ownBath,
-  restInTheWay,
-} from './sheet-model.ts'
+import { bathOf, lotToOpen, nextAct, openRecord, openSteps, otherBaths, ownBath } from './sheet-model.ts'
 import type { NextAct } from './sheet-model.ts'
 import { Amounts, CautionsNow, SignedOverrides, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
+import { restInTheWay } from '../../../shared/messages/in-the-way.ts'
 import {
   emptySecond,
   hasReadAll,
@@ -17,7 +18,6 @@ import {
   othersMayAct,
   otherCautions,
   ownBath,
-  restInTheWay,
   sheetMode,
   waitsForOthers,
 } from '../../../src/features/doses/sheet-model.ts'
