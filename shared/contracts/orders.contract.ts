@@ -65,6 +65,9 @@ export const OrderRow = z.object({
     .nullable()
     .describe('Broken: the text cannot be read, or what is stored beside it is not what was signed'),
   dosesGiven: z.int().describe('Doses given'),
+  dosesIrregular: z
+    .int()
+    .describe('Doses against a rule, given more than once, or whose bath was stopped before its time'),
   doses: z.int().nullable().describe('Doses planned'),
   nextDueAt: Instant.nullable().describe('Next planned dose'),
 })
@@ -78,6 +81,18 @@ const OrderEvent = z.object({
   by: z.string().describe('Who did it'),
 })
 
+const CalendarRecord = z.object({
+  kind: z.enum(['given', 'recorded', 'withheld', 'refused']).describe('What was recorded'),
+  happenedAt: Instant.describe('When it happened'),
+  by: z.string().describe('Who recorded it'),
+  stoppedAt: Instant.nullable().describe('When its bath was stopped before its time'),
+  broke: z
+    .array(z.string())
+    .describe('What it breaks, in words without figures; warnings of the water left out'),
+  warnings: z.int().describe('How many warnings of the water stood besides'),
+  record: z.enum(['intact', 'broken']).describe('Whether it is what was recorded'),
+})
+
 const CalendarDose = z.object({
   key: z.string().describe('Which planned dose: 1, 2 …'),
   dueAt: Instant.describe('When it is planned'),
@@ -87,9 +102,7 @@ const CalendarDose = z.object({
     .enum(['given', 'recorded', 'withheld', 'refused'])
     .nullable()
     .describe('What was recorded of it last; null: nothing yet'),
-  recordedAt: Instant.nullable().describe('When that happened'),
-  stoppedAt: Instant.nullable().describe('When its bath was stopped before its time'),
-  record: z.enum(['intact', 'broken']).describe('Whether it is what was recorded'),
+  records: z.array(CalendarRecord).describe('Every record of it that stands, the oldest first'),
 })
 
 export const SignedVersion = z.object({

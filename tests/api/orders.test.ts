@@ -234,7 +234,7 @@ describe('an order for a bath', () => {
     // what screens read of a signed text is all there
     expect(SignedBathOrder.parse(version.content)).toMatchObject({ targetText: '2\u00a0mg/L' })
     expect(signed.body.calendar).toMatchObject([
-      { key: '1', dueAt: '2026-12-01T19:00:00.000Z', recorded: null, recordedAt: null },
+      { key: '1', dueAt: '2026-12-01T19:00:00.000Z', recorded: null, records: [] },
     ])
     const trail = await owner.query(`SELECT action FROM audit_entries WHERE subject_id = $1 ORDER BY seq`, [
       draft.id,

@@ -272,7 +272,10 @@ describe('doses on the worklist', () => {
     )
     const { agent } = await api.as('veterinarian')
     const { calendar } = (await agent.get(`/api/orders/${number}`).expect(200)).body
-    expect(calendar[0]).toMatchObject({ recorded: 'recorded', stoppedAt: '2026-12-01T18:15:00.000Z' })
+    expect(calendar[0]).toMatchObject({
+      recorded: 'recorded',
+      records: [{ kind: 'recorded', stoppedAt: '2026-12-01T18:15:00.000Z' }],
+    })
   })
 
   it('drafts and proposals wait for a veterinarian', async () => {

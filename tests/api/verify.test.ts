@@ -194,7 +194,7 @@ describe('a kept row that another hand changed', () => {
     expect(shown).toMatchObject({ record: 'broken', amountText: null })
     expect(shown.exceptions[0].title).toBe('Not what was recorded')
     const order = (await house.technician.agent.get(`/api/orders/${number}`).expect(200)).body
-    expect(order.calendar[0].record).toBe('broken')
+    expect(order.calendar[0].records).toMatchObject([{ record: 'broken' }])
     const print = await house.technician.agent.get(`/api/orders/${number}/print`).buffer(true).expect(200)
     const paper = textOf(print.body as Buffer).replaceAll(/\s+/g, ' ')
     expect(paper).toContain('Not what was recorded')

@@ -151,6 +151,7 @@ export function presentOrderRow(row: OrderReadRow, now: string, signer: Pick<Sig
     versionNo: content?.versionNo ?? row.version_no,
     record,
     dosesGiven: row.given,
+    dosesIrregular: row.irregular,
     doses: courseOf(row)?.doses ?? null,
     nextDueAt: isOpen && next ? next.dueAt : null,
   }

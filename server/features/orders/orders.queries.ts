@@ -18,6 +18,7 @@ import { isOrderText } from './is-order-text.ts'
 import { standInGone, standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
 import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
+import { presentRecord } from './present-record.ts'
 import {
   readEvents,
   readOrder,
@@ -160,17 +161,9 @@ export function createOrderQueries(parts: OrderQueriesParts) {
           by: event.by_name ?? '',
         })),
         calendar: plannedOf(row).map(({ key, dueAt, opensAt, closesAt }) => {
-          const last = recorded.find((dose) => dose.dose_key === key)
-          return {
-            key,
-            dueAt,
-            opensAt,
-            closesAt,
-            recorded: last?.kind ?? null,
-            recordedAt: last?.happened_at.toISOString() ?? null,
-            stoppedAt: last?.stopped_at?.toISOString() ?? null,
-            record: last?.is_as_written === false ? ('broken' as const) : ('intact' as const),
-          }
+          const own = recorded.filter((dose) => dose.dose_key === key)
+          const records = own.map(presentRecord).reverse()
+          return { key, dueAt, opensAt, closesAt, recorded: own[0]?.kind ?? null, records }
         }),
         may: mayBe.filter((action) => decide(action, actor.roles).allowed),
       }

@@ -41,6 +41,8 @@ export interface OrderReadRow {
   /** Doses whose two calculations agree, under the version in force. */
   agreed_keys: string[]
   given: number
+  /** Doses against a rule, stopped before the time was over, or given more than once. */
+  irregular: number
   /** A timed bath, or one whose time cannot be read, went in and has no end. */
   running: boolean
   /** The signed version in force as its columns say it; null while none is signed. */
@@ -77,6 +79,14 @@ const columns = `
   coalesce((SELECT array_agg(a.dose_key) FROM calculations_agreed a WHERE a.order_version_id = v.id), '{}') AS agreed_keys,
   (SELECT count(*)::int FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
     WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')) AS given,
+  (SELECT count(DISTINCT d.dose_key)::int FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id
+    WHERE x.order_id = o.id
+      AND (d.exceptions_text LIKE '%"level":"stop"%' OR d.exceptions_text LIKE '%"ruleId":"record"%'
+           OR EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id AND s.cause = 'stopped')
+           OR (d.kind IN ('given', 'recorded')
+               AND EXISTS (SELECT 1 FROM live_doses e JOIN orders_of_doses y ON y.dose_id = e.id
+                            WHERE y.order_id = o.id AND e.dose_key = d.dose_key AND e.id <> d.id
+                              AND e.kind IN ('given', 'recorded'))))) AS irregular,
   EXISTS (SELECT 1 FROM live_doses d JOIN orders_of_doses x ON x.dose_id = d.id JOIN contacts_of_doses l ON l.dose_id = d.id
            WHERE x.order_id = o.id AND d.kind IN ('given', 'recorded')
              AND NOT EXISTS (SELECT 1 FROM live_bath_stops s WHERE s.dose_id = d.id)
@@ -235,7 +245,7 @@ export function readRecordedDoses(db: Db, orderId: string): Promise<RecordedDose
                                  AND g.part = 'first' AND g.recorded_at <= x.recorded_at
                                ORDER BY g.recorded_at DESC, g.id DESC LIMIT 1) f ON f.recorded_by = x.recorded_by
           WHERE x.id = d.second_calculation_id) c ON true
-      WHERE w.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC`,
+      WHERE w.order_id = $1 ORDER BY d.happened_at DESC, d.recorded_at DESC, d.id DESC`,
     [orderId],
   )
 }

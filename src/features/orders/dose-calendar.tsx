@@ -9,18 +9,22 @@ import { StepPicture } from '../../ui/step-mark.tsx'
 import type { StepState } from '../../ui/step-mark.tsx'
 
 type CalendarDose = Order['calendar'][number]
+type CalendarRecord = CalendarDose['records'][number]
+
+const wentIn = ({ kind }: CalendarRecord) => kind === 'given' || kind === 'recorded'
+const isAsItShouldBe = ({ stoppedAt, broke, record }: CalendarRecord) =>
+  stoppedAt === null && broke.length === 0 && record === 'intact'
 
 /** How a planned dose stands at an instant: the mark, and the words beside it. */
 export function doseStanding(
   dose: CalendarDose,
   now: string,
-): { mark: StepState; words: 'due' | 'coming' | 'past' | NonNullable<CalendarDose['recorded']> } {
+): { mark: StepState; words: 'due' | 'coming' | 'past' | CalendarRecord['kind'] } {
+  const { records } = dose
   if (dose.recorded !== null)
     return {
-      mark:
-        dose.stoppedAt === null && (dose.recorded === 'given' || dose.recorded === 'recorded')
-          ? 'done'
-          : 'failed',
+      // one that was withheld at first and given later is done
+      mark: records.filter(wentIn).length === 1 && records.every(isAsItShouldBe) ? 'done' : 'failed',
       words: dose.recorded,
     }
   const at = Date.parse(now)
@@ -33,11 +37,30 @@ const standingWords = () => ({
   due: words.dueState,
   coming: words.comingState,
   past: words.pastState,
-  given: doseKindNames.given,
-  recorded: doseKindNames.recorded,
-  withheld: doseKindNames.withheld,
-  refused: doseKindNames.refused,
+  ...doseKindNames,
 })
+
+/** One record of a dose: what, when, by whom, and what it breaks. */
+function Recorded({ record, say }: { record: CalendarRecord; say: (at: string) => string }) {
+  const { kind, happenedAt, by, stoppedAt, broke, warnings } = record
+  return (
+    <span className="block">
+      {words.recordedAt({ what: doseKindNames[kind], at: say(happenedAt), by })}
+      {stoppedAt === null ? null : (
+        <b className="block text-magenta">{words.stoppedAt({ at: say(stoppedAt) })}</b>
+      )}
+      {record.record === 'broken' ? <b className="block text-magenta">{doseWords.notAsRecorded}</b> : null}
+      {broke.map((title) => (
+        <b key={title} className="block text-magenta">
+          {title}
+        </b>
+      ))}
+      {warnings > 0 ? (
+        <span className="t-note block">{words.warningsBesides({ count: warnings })}</span>
+      ) : null}
+    </span>
+  )
+}
 
 /** The planned doses with their windows and what became of them; each leads to its bath sheet. */
 export function DoseCalendar({
@@ -67,9 +90,13 @@ export function DoseCalendar({
               <span>
                 <b>{words.dose({ key: dose.key })}</b> <span className="num">{say(dose.dueAt)}</span>
                 {', '}
-                {dose.recordedAt === null ? what : words.recordedAt({ what, at: say(dose.recordedAt) })}
-                {dose.stoppedAt === null ? null : <b>, {words.stoppedAt({ at: say(dose.stoppedAt) })}</b>}
-                {dose.record === 'broken' ? <b> {doseWords.notAsRecorded}</b> : null}
+                {dose.records.length === 0 ? what : null}
+                {dose.records.length > 1 ? (
+                  <b className="text-magenta">{words.severalRecords({ count: dose.records.length })}</b>
+                ) : null}
+                {dose.records.map((record) => (
+                  <Recorded key={`${record.happenedAt} ${record.kind}`} record={record} say={say} />
+                ))}
                 <small>{words.window({ from: say(dose.opensAt), until: say(dose.closesAt) })}</small>
               </span>
               {sheets ? (

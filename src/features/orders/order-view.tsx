@@ -45,7 +45,7 @@ function Head({ order, more }: { order: Order; more: string }) {
           {words.source({ by: order.createdBy, at: sayInstant(order.createdAt, zone) })}
         </>
       }
-      flag={<PhaseTag phase={order.phase} record={order.record} />}
+      flag={<PhaseTag order={order} />}
     />
   )
 }

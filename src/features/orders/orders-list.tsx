@@ -79,7 +79,7 @@ function columnsOf(say: (at: string) => string, now: string): TableColumn<OrderR
       narrow: 'head',
       cell: (row) => (
         <>
-          <PhaseTag phase={row.phase} record={row.record} />
+          <PhaseTag order={row} />
           {row.record === 'broken' ? (
             <span className="text-magenta t-strong block">{words.recordBroken}</span>
           ) : null}

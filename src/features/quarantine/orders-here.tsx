@@ -37,7 +37,7 @@ export function OrdersHere({ enclosures }: { enclosures: readonly string[] }) {
             )}
             , {order.enclosureCode}
           </span>
-          <PhaseTag phase={order.phase} record={order.record} />
+          <PhaseTag order={order} />
         </p>
       ))}
     </section>

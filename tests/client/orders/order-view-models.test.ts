@@ -10,8 +10,17 @@ const dose: Order['calendar'][number] = {
   opensAt: '2026-12-01T12:00:00.000Z',
   closesAt: '2026-12-02T00:00:00.000Z',
   recorded: null,
-  recordedAt: null,
+  records: [],
+}
+
+type Recorded = (typeof dose)['records'][number]
+const record: Recorded = {
+  kind: 'given',
+  happenedAt: '2026-12-01T18:05:00.000Z',
+  by: 'Soren Brandt',
   stoppedAt: null,
+  broke: [],
+  warnings: 0,
   record: 'intact',
 }
 
@@ -21,14 +30,25 @@ describe('the calendar of doses', () => {
     expect(doseStanding(dose, dose.opensAt)).toEqual({ mark: 'due', words: 'due' })
     expect(doseStanding(dose, dose.closesAt)).toEqual({ mark: 'due', words: 'due' })
     expect(doseStanding(dose, '2026-12-02T00:00:01Z')).toEqual({ mark: 'overdue', words: 'past' })
-    const recorded = (kind: Order['calendar'][number]['recorded']) =>
-      doseStanding({ ...dose, recorded: kind }, '2026-12-05T00:00:00Z').mark
+    const recorded = (kind: Recorded['kind']) =>
+      doseStanding({ ...dose, recorded: kind, records: [{ ...record, kind }] }, '2026-12-05T00:00:00Z').mark
     expect([recorded('given'), recorded('recorded'), recorded('withheld'), recorded('refused')]).toEqual([
       'done',
       'done',
       'failed',
       'failed',
     ])
+  })
+
+  it('marks no dose as done that was against a rule, stopped, changed by hand or recorded twice', () => {
+    const mark = (...records: Recorded[]) =>
+      doseStanding({ ...dose, recorded: 'given', records }, '2026-12-05T00:00:00Z').mark
+    expect(mark({ ...record, warnings: 2 })).toBe('done')
+    expect(mark({ ...record, broke: ['Another amount was given than was worked out'] })).toBe('failed')
+    expect(mark({ ...record, stoppedAt: '2026-12-01T18:15:00.000Z' })).toBe('failed')
+    expect(mark({ ...record, record: 'broken' })).toBe('failed')
+    expect(mark(record, { ...record, happenedAt: '2026-12-01T18:09:00.000Z' })).toBe('failed')
+    expect(mark({ ...record, kind: 'withheld' }, record)).toBe('done')
   })
 })
 
