@@ -115,6 +115,7 @@ export const BathSheet = z.object({
     .nullable()
     .describe('Held, or ended; null while doses may be given'),
   state: z.enum(['due', 'running', 'done', 'held', 'ended', 'broken']).describe('Where this dose stands'),
+  recordFault: SignatureBlock.shape.fault,
   record: SignatureBlock.shape.state.describe(
     'Whether the order is what was signed, whatever became of this dose',
   ),

@@ -1,6 +1,18 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
+import { entriesBeside } from '../domain/orders/entries-beside.ts'
 import { Instant, LocalDate } from './primitives.ts'
+
+/** What a check found wrong with a signed record. */
+export const RecordFault = z.object({
+  what: z
+    .enum(['text', 'whose', 'entries'])
+    .describe(
+      'The text is not the one signed or is gone; a signature is missing or the text is that of another record; the text is intact and what is stored beside it is not what it says',
+    ),
+  entries: z.array(z.enum(entriesBeside)).describe('What is stored beside the text and differs from it'),
+})
+export type RecordFault = z.infer<typeof RecordFault>
 
 /** The block that stands under everything that was signed, on screen and on paper. */
 export const SignatureBlock = z.object({
@@ -22,7 +34,8 @@ export const SignatureBlock = z.object({
   keyId: z.string().describe('Short name of the installation key'),
   state: z
     .enum(['intact', 'broken', 'unknown-key'])
-    .describe('Checked now: intact; broken (text and signature do not fit); key not known here'),
+    .describe('Checked now: intact; broken (see what is wrong); key not known here'),
+  fault: RecordFault.nullable().describe('What is wrong with a broken one; null of any other'),
 })
 export type SignatureBlock = z.infer<typeof SignatureBlock>
 

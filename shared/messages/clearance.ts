@@ -10,7 +10,6 @@ export const clearanceWords = defineMessages({
   cleared: (p: { on: string }) => `Cleared from quarantine on ${p.on}`,
   notValid: 'This certificate does not hold',
   recalled: 'Recalled after clearance: void. Do not move animals on the strength of this page.',
-  broken: 'Record check failed: this is not the text that was signed. Do not act on this page.',
   unreadable:
     'The signed text of this clearance cannot be read any more. Tell the administrator; treat the animals as in quarantine.',
   notCleared: 'This case has not been cleared.',

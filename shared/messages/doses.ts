@@ -9,7 +9,6 @@ export const doseWords = defineMessages({
     `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
   stillRunning: (p: { key: string; at: string }) =>
     `The bath of dose ${p.key}, begun ${p.at}, has no end. Record first when the animals were out of it or the water was changed.`,
-  notIntact: 'The signed order no longer matches its signature. Do not dose; tell a veterinarian.',
   meaningOverride: 'override of a stop for this dose',
   overrideUnreadable: 'An override that cannot be read any more',
   findingChanged:

@@ -80,7 +80,6 @@ export const orderViewWords = defineMessages({
   division: 'Balance or measure reads to',
   notYet: 'not said yet',
   each: 'for each dose, as signed',
-  notAsSigned: 'Not shown to be what was signed. Do not dose.',
   draftAmount: 'as it stands, not signed',
   noAmount: 'No amount yet',
   range: (p: { range: string }) => `Range from the error of the volume: ${p.range}.`,
@@ -151,12 +150,11 @@ export const orderViewWords = defineMessages({
   intact: 'Checked now: this is the text that was signed.',
   recordUnderGone: 'Record what went in',
   brokenTitle: 'Record check failed',
-  broken:
-    'This is not the text that was signed. Do not act on it, and do not dose. Tell the administrator; a print says the same.',
+  broken: (p: { found: string }) =>
+    `${p.found} Do not act on it, and do not dose. Tell the administrator; a print says the same.`,
   unknownKeyTitle: 'Signed with a key that is not known here',
   unknownKey:
     'Nothing shows that this is the text that was signed. Do not dose until the administrator has looked.',
-  unreadable: 'The signed text was changed or can’t be read any more. None of its figures is shown.',
   check: (p: { fingerprint: string }) => `Record check ${p.fingerprint}`,
 
   versions: 'Versions',

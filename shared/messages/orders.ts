@@ -142,8 +142,6 @@ export const orderPaper = defineMessages({
   by: 'Given by',
   version: (p: { n: number }) => `version ${String(p.n)}`,
   title: (p: { number: string; n: number }) => `Treatment order ${p.number}, version ${String(p.n)}`,
-  changed: 'The text stored for this order is not the one that was signed. None of its figures is printed.',
-  broken: 'Record check failed: this is not the text that was signed. Do not act on this page.',
   completed: 'All doses are recorded. Do not dose from this page.',
   lastRuns: 'No dose is to come, and a bath runs. Do not dose from this page.',
   discontinued: 'Discontinued. Do not dose from this page.',

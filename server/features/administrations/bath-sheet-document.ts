@@ -14,6 +14,7 @@ import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { restInTheWay, sayObstacle } from '../../../shared/messages/in-the-way.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
+import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
@@ -51,7 +52,10 @@ function amountLimits({ sheet, content }: BathPaper): string {
 
 function amountBlock(paper: BathPaper): DocumentBlock {
   const { sheet, content, block } = paper
-  if (!sheet.amountNow) return { kind: 'paragraph', text: [{ text: bathPaper.noAmount, bold: true }] }
+  if (!sheet.amountNow) {
+    const text = sheet.record === 'intact' ? bathPaper.noAmount : sayDoNotDose(sheet.recordFault)
+    return { kind: 'paragraph', text: [{ text, bold: true }] }
+  }
   const { number, symbol } = formatDose(sheet.amountNow.value, sheet.amountNow.unit as UnitCode)
   const { strength, strengthBasis } = content.product
   return {

@@ -1,6 +1,7 @@
 import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { orderProblemWords } from '../../../shared/messages/orders.ts'
+import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { permissionWords } from '../../../shared/messages/permissions.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import type { Clock } from '../../platform/clock.ts'
@@ -33,7 +34,7 @@ export function personOf(tx: Tx): string {
 
 /** No dose is prepared from an order that is not what was signed. */
 export function refuseBroken({ block }: DoseSituation): void {
-  if (block.state !== 'intact') throw new Problem('broken-record', { detail: doseWords.notIntact })
+  if (block.state !== 'intact') throw new Problem('broken-record', { detail: sayDoNotDose(block.fault) })
 }
 
 /** The signed version that a dose is prepared under; nothing is prepared where there is none any more. */

@@ -4,10 +4,12 @@ import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.
 import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import { secondCalculationAgrees } from '../../../shared/domain/dose/second-calculation-agrees.ts'
 import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
+import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
 import { overrideStands } from '../../../shared/domain/orders/dose-override.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
+import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayObstacle } from '../../../shared/messages/in-the-way.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { sayCaution } from '../../../shared/messages/say-caution.ts'
@@ -117,8 +119,9 @@ export function obstacles(
 ): string[] {
   const { block, row, answer, judgement, drift, content, records } = situation
   if (!situation.readable) return [doseWords.unreadable]
+  if (!isTextSound(situation.block.fault)) return [sayDoNotDose(situation.block.fault)]
   const why: string[] = []
-  if (block.state !== 'intact') why.push(doseWords.notIntact)
+  if (block.state !== 'intact') why.push(sayDoNotDose(block.fault))
   if (row.phase === 'held') why.push(doseWords.held)
   if (row.phase === 'discontinued' || row.phase === 'expired') why.push(doseWords.ended)
   if (records.some((record) => record.dose_key === situation.planned.key)) why.push(doseWords.alreadyRecorded)

@@ -1,9 +1,9 @@
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sayTreated } from '../orders/index.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
-import type { ResolveCode } from '../../../shared/domain/cautions/caution-code.ts'
 import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
 import type { DoseCourse } from '../../../shared/domain/orders/dose-states.ts'
+import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
@@ -21,6 +21,7 @@ import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
+import { placesToResolve } from './places-to-resolve.ts'
 import { presentRecord, storedText } from './present-record.ts'
 import { runningBaths } from './running-baths.ts'
 import { saidRounding } from './said-rounding.ts'
@@ -196,32 +197,6 @@ function presentSteps(
 const isAnswered = (situation: DoseSituation, stops: readonly Caution[]) =>
   stops.length > 0 && stops.every((one) => answeredStop(situation, one) !== null)
 
-/** Where in the application somebody resolves what a caution asks for; the rest is done at the tank or by the vet. */
-const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][number]['place']>> = {
-  'read-oxygen': 'readings',
-  'raise-oxygen': 'readings',
-  'aerate-and-log': 'water',
-  'read-temperature': 'readings',
-  'cool-water': 'readings',
-  'read-alkalinity': 'readings',
-  'raise-alkalinity': 'readings',
-  'read-copper': 'readings',
-  'read-water': 'readings',
-  'correct-water': 'readings',
-  'part-the-water': 'water',
-  'move-animals': 'water',
-  'record-inhabitants': 'water',
-  'carbon-off': 'water',
-  'ozone-off': 'water',
-  'uv-off': 'water',
-  'fractionator-off': 'water',
-  'determine-volume': 'volume',
-  'look-at-the-bottle': 'lot',
-  'use-other-lot': 'lot',
-  'record-lot': 'lot',
-  'calculate-again-by-another': 'second-calculation',
-}
-
 /** A caution with who overrode it, and what an override of it would have to name. */
 function presentCaution(
   situation: DoseSituation,
@@ -283,7 +258,10 @@ export function presentSheet(request: SheetRequest): BathSheet {
     ended: situation.row.phase === 'discontinued',
   }
   const calendar = presentCalendar(situation.plan, records, course, now)
-  const why = obstacles(situation, calculations, { hide })
+  // beside a record that fails its check stands no figure that somebody could dose by
+  const hideFigures = hide || situation.block.state !== 'intact'
+  const isSound = isTextSound(situation.block.fault)
+  const why = obstacles(situation, calculations, { hide: hideFigures })
   return {
     number: content.number,
     versionNo: content.versionNo,
@@ -295,6 +273,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     standing: standingOf(situation),
     state: stateOf(situation, calendar),
     record: situation.block.state,
+    recordFault: situation.block.fault,
     enclosureCode: content.enclosure.code,
     enclosureName: content.enclosure.name,
     drug: content.product.establishedName,
@@ -309,27 +288,30 @@ export function presentSheet(request: SheetRequest): BathSheet {
       expiresOn,
     })),
     lotId: hideLot ? null : (first?.lot_id ?? fields.lotId),
-    targetText: `${content.targetText} ${content.basisText}`.trim(),
+    targetText: isSound ? `${content.targetText} ${content.basisText}`.trim() : '',
     contactMinutes: situation.readable && course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,
-    signedAmountText: hide || !situation.readable ? null : content.amount.text,
-    amountNowText: hide || !dose?.measured ? null : formatDose(dose.measured.value, dose.measured.unit).text,
-    amountNow: hide || !dose?.measured ? null : { value: dose.measured.value, unit: dose.measured.unit },
-    working: hide
+    signedAmountText: hideFigures ? null : content.amount.text,
+    amountNowText:
+      hideFigures || !dose?.measured ? null : formatDose(dose.measured.value, dose.measured.unit).text,
+    amountNow:
+      hideFigures || !dose?.measured ? null : { value: dose.measured.value, unit: dose.measured.unit },
+    working: hideFigures
       ? []
       : (dose?.working ?? []).map((line) => ({
           label: workingLabels[line.code](line.params),
           shown: formatExpression(line.expression),
           result: formatWorkingValue(line).text,
         })),
-    roundingText: hide ? null : saidRounding(situation),
+    roundingText: hideFigures ? null : saidRounding(situation),
     driftPercent: drift?.percent ?? null,
     driftWithin: drift?.within ?? false,
     cautions: [
       ...leftTheWater(situation),
-      ...(answer?.cautions ?? []).map((caution) => presentCaution(situation, caution, zone)),
+      // judged by a text that may be that of another order, and with its figures
+      ...(isSound ? (answer?.cautions ?? []) : []).map((caution) => presentCaution(situation, caution, zone)),
     ],
     overrides: presentOverrides(situation),
     steps: presentSteps(situation, calculations, zone),

@@ -6,6 +6,7 @@ import { canonicalJson } from '../../../shared/domain/canonical-json.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { hashOf } from '../../platform/database/transactions.ts'
 import type { Db } from '../../platform/database/db.ts'
+import { withFault } from '../signing/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { readAllOverrides, readLooseOverrideTexts, readOverrides } from './overrides.reads.ts'
 import type { OverrideReadRow } from './overrides.reads.ts'
@@ -63,7 +64,7 @@ async function readSigned(signing: SigningService, row: OverrideReadRow): Promis
   return {
     id: row.id,
     content: isSound ? content : null,
-    block: { ...block, state: block.state === 'intact' && !isSound ? 'broken' : block.state },
+    block: block.state === 'intact' && !isSound ? withFault(block, { what: 'whose', entries: [] }) : block,
   }
 }
 

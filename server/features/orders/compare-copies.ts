@@ -1,3 +1,5 @@
+import { entriesBeside } from '../../../shared/domain/orders/entries-beside.ts'
+import type { EntryBeside } from '../../../shared/domain/orders/entries-beside.ts'
 import { targetMgPerL } from './target-mg-per-l.ts'
 import type { SignedOrder } from './order-content.ts'
 
@@ -26,11 +28,11 @@ type Copy = string | number | null | undefined
 export function differingCopies(
   { version, animalIds, order }: StoredCopies,
   text: ReadText | null,
-): string[] {
+): EntryBeside[] {
   const { content, subject, signedBy } = text ?? {}
   if (!content || !subject || !signedBy) return ['text']
   const { fields, product, volume, amount } = content
-  const signed: Record<string, Copy> = {
+  const signed: Partial<Record<EntryBeside, Copy>> = {
     version_no: content.versionNo,
     agent: product.agent,
     product_id: product.id,
@@ -46,7 +48,7 @@ export function differingCopies(
     interval_hours: fields.intervalHours,
     contact_minutes: fields.timing === 'timed' ? fields.contactMinutes : null,
   }
-  const differ = Object.entries(signed).flatMap(([name, value]) => (version[name] === value ? [] : [name]))
+  const differ = entriesBeside.filter((name) => name in signed && version[name] !== signed[name])
   const atOf = (name: string) => Date.parse(String(version[name]))
   if (atOf('starts_at') !== Date.parse(fields.startsAt ?? '')) differ.push('starts_at')
   if (atOf('signed_at') !== Date.parse(signedBy.signedAt ?? '')) differ.push('signed_at')

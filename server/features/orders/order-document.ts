@@ -6,6 +6,7 @@ import type {
 } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
 import { exceptionsWithoutFigures } from '../../../shared/domain/dose/exceptions-without-figures.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
@@ -15,6 +16,7 @@ import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
+import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
@@ -27,8 +29,6 @@ import { sayRounding } from './say-rounding.ts'
 export interface OrderPaper {
   /** What was signed; the columns beside it where the text was changed. */
   content: SignedOrder
-  /** The text is not the one that was signed: none of its figures is printed. */
-  isChanged: boolean
   block: SignatureBlock
   row: OrderRow
   /** What is recorded of its doses, the newest first. */
@@ -48,7 +48,7 @@ export function orderNotice({
   versionNo,
 }: Pick<OrderPaper, 'block' | 'row' | 'superseded'> & { versionNo: number }): string | null {
   if (block.state !== 'intact')
-    return block.state === 'broken' ? orderPaper.broken : documentWords.recordUnknownKey
+    return block.fault ? sayFaultNotice(block.fault) : documentWords.recordUnknownKey
   if (superseded) return documentWords.supersededNotice({ version: orderPaper.version({ n: versionNo + 1 }) })
   if (row.phase === 'held') return documentWords.heldNotice
   if (row.phase === 'discontinued') return orderPaper.discontinued
@@ -57,13 +57,18 @@ export function orderNotice({
   return row.phase === 'completed' ? orderPaper.completed : null
 }
 
-function productBlock({ content }: OrderPaper): DocumentBlock {
+/** Beside a failed check an amount is only that of the text, and is said to be; of a key from elsewhere not even that. */
+const amountFrom = ({ state, fault }: SignatureBlock) =>
+  state === 'intact' ? {} : { above: fault ? faultWords.fromText : faultWords.unknownKey }
+
+function productBlock({ content, block }: OrderPaper): DocumentBlock {
   const { amount, product, lot } = content
   const measured = amount.measured ?? { value: String(amount.unrounded), unit: amount.unroundedUnit }
   const { number, symbol } = formatDose(measured.value, measured.unit as UnitCode)
   const strength = formatDose(product.strength.value, product.strength.unit as UnitCode).text
   return {
     kind: 'amount',
+    ...amountFrom(block),
     value: number,
     unit: symbol,
     lines: [
@@ -291,9 +296,13 @@ function statements(paper: OrderPaper): DocumentBlock[] {
   ]
 }
 
-/** In place of a changed text: that it is one, and when to stop a bath that runs. */
-const changedStatements = ({ content }: OrderPaper): DocumentBlock[] => [
-  { kind: 'paragraph', text: [{ text: orderPaper.changed, bold: true }] },
+/** What the check found, in a sentence. */
+const faultBlocks = ({ block: { fault } }: OrderPaper): DocumentBlock[] =>
+  fault === null ? [] : [{ kind: 'paragraph', text: [{ text: sayFault(fault), bold: true }] }]
+
+/** In place of a text that is not the one signed, or not known to be that of the order: when to stop a bath that runs. */
+const faultyStatements = ({ content }: OrderPaper): DocumentBlock[] => [
+  { kind: 'paragraph', text: [{ text: faultWords.noFigures, bold: true }] },
   { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
 ]
 
@@ -329,7 +338,8 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       note: documentWords.laterVersion,
     },
     blocks: [
-      ...(paper.isChanged ? changedStatements(paper) : statements(paper)),
+      ...faultBlocks(paper),
+      ...(isTextSound(block.fault) ? statements(paper) : faultyStatements(paper)),
       { kind: 'signatures', entries: [signatureEntry(block)] },
       { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
       standingCaution(),

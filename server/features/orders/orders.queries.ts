@@ -4,17 +4,20 @@ import type { SignatureBlock } from '../../../shared/contracts/signing.contract.
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
 import type { listOrders } from '../../../shared/contracts/orders.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
 import { orderProblemWords } from '../../../shared/messages/orders.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import type { Db } from '../../platform/database/db.ts'
 import { nextCursorOf, pageOf } from '../../platform/database/paging.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
+import { withFault } from '../signing/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { SignedOrder } from './order-content.ts'
 import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
 import { readOpenOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
+import { faultOf } from './record-fault.ts'
 import { standInGone, standInOrder } from './stand-in-order.ts'
 import { differingCopies } from './compare-copies.ts'
 import { plannedOf, presentOrderRow, readText } from './orders.present.ts'
@@ -79,15 +82,18 @@ export function createOrderQueries(parts: OrderQueriesParts) {
   async function readVersion(order: OrderReadRow, version: VersionReadRow) {
     const { content, block, text } = await parts.signing.readSealed(version.signed_text_id, order.created_at)
     const differ = differingCopies({ ...version.copies, order }, readText(text))
-    const isWhole = differ.length === 0 && missingLinks(order.chain).length === 0
-    const state = block.state === 'intact' && !isWhole ? 'broken' : block.state
     const read = isOrderText(content) ? content : null
     // a text that is not the one signed gives no figure to anybody; what columns say does not change the text
     const isChanged = block.state === 'broken'
+    // of a key from elsewhere nobody can say more than that
+    const fault =
+      block.state === 'unknown-key'
+        ? null
+        : faultOf(block.state, differ, missingLinks(order.chain).length > 0)
     return {
       content: isChanged ? null : read,
       isChanged: read !== null && isChanged,
-      block: { ...block, state: read || state === 'unknown-key' ? state : 'broken' },
+      block: fault ? withFault(block, fault) : block,
     }
   }
 
@@ -127,10 +133,10 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         readRecordedDoses(parts.dataSource, row.id),
       ])
       const sealed = await Promise.all(
-        versions.map(async (version) => ({
-          versionNo: version.version_no,
-          ...(await readVersion(row, version)),
-        })),
+        versions.map(async (version) => {
+          const { content, block } = await readVersion(row, version)
+          return { versionNo: version.version_no, content: isTextSound(block.fault) ? content : null, block }
+        }),
       )
       const now = parts.now().toISOString()
       const blindness = await readBlindness(parts.dataSource, [row], now, { areAll: false })

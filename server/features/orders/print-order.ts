@@ -33,7 +33,6 @@ export function createOrderPrinter(parts: PrintParts) {
       })
     const model = orderDocument({
       content: drawable(content),
-      isChanged: sealed.isChanged,
       block: sealed.block,
       row: sealed.row,
       recorded: sealed.recorded,

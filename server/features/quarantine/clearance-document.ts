@@ -6,6 +6,7 @@ import type {
 } from '../../../shared/domain/documents/pdf-document-model.ts'
 import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { clearanceWords as words } from '../../../shared/messages/clearance.ts'
+import { sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { quarantineKindWords } from '../../../shared/messages/quarantine.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
@@ -26,7 +27,7 @@ export interface ClearancePaper {
 /** A state of the clearance that no page may hide; null while it holds. */
 function noticeOf({ block, recalled }: ClearancePaper): string | null {
   if (block.state !== 'intact')
-    return block.state === 'broken' ? words.broken : documentWords.recordUnknownKey
+    return block.fault ? sayFaultNotice(block.fault) : documentWords.recordUnknownKey
   return recalled ? words.recalled : null
 }
 

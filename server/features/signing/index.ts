@@ -8,6 +8,7 @@ import { SignedText } from './signed-text.entity.ts'
 import { readSignedText } from './signing.reads.ts'
 import { createSigningService } from './signing.service.ts'
 
+export { withFault } from './with-fault.ts'
 export type { Signatory, SigningService } from './signing.service.ts'
 export const signingEntities = [SignedText]
 

@@ -153,6 +153,7 @@ const goneSealed = (recordedAt: Date): Sealed => ({
     hash: '',
     keyId: '',
     state: 'broken',
+    fault: { what: 'text', entries: [] },
   },
 })
 
@@ -175,6 +176,7 @@ export function presentSealed(row: SignedText, signer: Signer): Sealed {
       hash: row.hash,
       keyId: row.keyId,
       state,
+      fault: state === 'broken' ? { what: 'text', entries: [] } : null,
     },
   }
 }

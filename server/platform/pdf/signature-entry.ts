@@ -1,12 +1,12 @@
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import type { SignatureEntry } from '../../../shared/domain/documents/pdf-document-model.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
+import { sayFaultUnderSignature } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 
-const checkWords = {
-  intact: () => documentWords.recordIntact,
-  broken: () => documentWords.recordBroken,
-  'unknown-key': () => documentWords.recordUnknownKey,
+function checkWordsOf({ state, fault }: SignatureBlock): string {
+  if (state === 'intact') return documentWords.recordIntact
+  return fault ? sayFaultUnderSignature(fault) : documentWords.recordUnknownKey
 }
 
 /** The signature and licence block as paper shows it, with the outcome of the check made now. */
@@ -22,7 +22,7 @@ export function signatureEntry(block: SignatureBlock): SignatureEntry {
     meaning: documentWords.signedAs({ meaning: block.meaning }),
     signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
     check: block.state === 'intact' ? 'intact' : 'broken',
-    checkWords: checkWords[block.state](),
+    checkWords: checkWordsOf(block),
   }
 }
 

@@ -3,6 +3,7 @@ import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { overrideWords, sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
+import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
 import { Facts } from '../../ui/facts.tsx'
@@ -47,7 +48,7 @@ export function Standing({ sheet, zone }: { sheet: BathSheet; zone: string }) {
         <p>{words.standingBy({ by: standing.by, at: sayMoment(standing.at, zone, sheet.now) })}</p>
       ) : null}
       {standing?.reason ? <p>{words.standingReason({ reason: standing.reason })}</p> : null}
-      {broken ? <p>{words.brokenNext}</p> : kind === 'held' ? <p>{words.liftBy}</p> : null}
+      {broken ? <p>{sayDoNotDose(sheet.recordFault)}</p> : kind === 'held' ? <p>{words.liftBy}</p> : null}
       {kind === 'completed' && !broken ? null : <p>{words.still}</p>}
     </section>
   )

@@ -5,6 +5,7 @@ import { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import { orderListWords, orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
+import { faultWords } from '../../../shared/messages/record-fault.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
@@ -78,7 +79,7 @@ function GoneOrder({ order }: { order: Order }) {
   const record = useMay('dose.record')
   return (
     <>
-      <BrokenRecord state="broken" unreadable />
+      <BrokenRecord state="broken" fault={{ what: 'whose', entries: [] }} unreadable />
       {record.allowed ? (
         <ButtonLink to={paths.orderSheet(order.number, '1')}>{words.recordUnderGone}</ButtonLink>
       ) : null}
@@ -146,7 +147,7 @@ export function SignedOrder({
       <Area>
         <Head order={order} more={`, ${orderListWords.version({ n: version.versionNo })}`} />
         {above}
-        <BrokenRecord state={signature.state} unreadable={content === null} />
+        <BrokenRecord state={signature.state} fault={signature.fault} unreadable={content === null} />
         {version.superseded ? (
           <Notice act={<Link to={paths.order(order.number)}>{words.toCurrent}</Link>}>
             <b>{words.supersededTitle({ n: version.versionNo })}.</b> {words.superseded}
@@ -180,7 +181,9 @@ export function SignedOrder({
                 {signature.state === 'intact' ? (
                   <p>{words.each}</p>
                 ) : (
-                  <p className="text-magenta t-strong">{words.notAsSigned}</p>
+                  <p className="text-magenta t-strong">
+                    {signature.fault ? faultWords.fromText : faultWords.unknownKey}
+                  </p>
                 )}
                 {content.amount ? (
                   <p>
@@ -232,7 +235,7 @@ export function SignedOrder({
           </>
         ) : (
           <div className="pane stack gap-5">
-            <p>{words.unreadable}</p>
+            <p>{faultWords.noFigures}</p>
             {version.superseded ? null : (
               <DoseCalendar order={order} zone={zone} now={now} sheets={record.allowed} />
             )}

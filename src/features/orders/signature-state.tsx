@@ -3,21 +3,27 @@ import { formatFingerprint } from '../../../shared/domain/documents/format-finge
 import type { SignatureBlock as Block } from '../../../shared/contracts/signing.contract.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
+import { faultWords, sayFault } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { Icon } from '../../ui/icon.tsx'
 import { SignatureBlock } from '../../ui/signature-block.tsx'
 
 /** Said loudly, first on the sheet: the text on it is not what was signed, or nobody can tell. */
-export function BrokenRecord({ state, unreadable }: { state: Block['state']; unreadable: boolean }) {
+export function BrokenRecord({
+  state,
+  fault,
+  unreadable,
+}: Pick<Block, 'state' | 'fault'> & { unreadable: boolean }) {
   if (state === 'intact' && !unreadable) return null
   const unknownKey = state === 'unknown-key'
+  const found = sayFault(fault ?? { what: 'text', entries: [] })
   return (
     <div className="broken-record" role="alert">
       <Icon of={OctagonX} size={26} />
       <div>
         <h2 className="t-head">{unknownKey ? words.unknownKeyTitle : words.brokenTitle}</h2>
-        <p>{unknownKey ? words.unknownKey : words.broken}</p>
-        {unreadable ? <p>{words.unreadable}</p> : null}
+        <p>{unknownKey ? words.unknownKey : words.broken({ found })}</p>
+        {unreadable ? <p>{faultWords.noFigures}</p> : null}
       </div>
     </div>
   )

@@ -86,6 +86,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   calendar: [],
   standing: null,
   state: 'due',
+  recordFault: null,
   enclosureCode: 'QT-3',
   enclosureName: 'Tank QT-3',
   drug: 'formalin',

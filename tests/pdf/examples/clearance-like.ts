@@ -16,6 +16,7 @@ export function signedBlock(state: SignatureBlock['state']): SignatureBlock {
     hash: '7c1e40af92d30b15'.repeat(4),
     keyId: '0011223344556677',
     state,
+    fault: state === 'broken' ? { what: 'text', entries: [] } : null,
   }
 }
 
