@@ -1,4 +1,6 @@
 import type { BathOrderFields } from '../../shared/contracts/order-primitives.ts'
+import type { ReadingParameter } from '../../shared/domain/readings/parameters.ts'
+import type { UnitCode } from '../../shared/domain/units/unit-table.ts'
 import type { DoseUse } from '../../shared/domain/formulary/dose-line.ts'
 import { nothingStated } from '../../shared/domain/orders/bath-order-draft.ts'
 import type { Composition } from '../composition.ts'
@@ -6,11 +8,13 @@ import { saidCautions } from '../features/orders/index.ts'
 import type { RequestContext } from '../platform/http/request-context.ts'
 import type { DemoActors, DemoPerson } from './people.ts'
 import { demoPassword } from './people.ts'
-import type { DemoOutside } from './water.ts'
+import type { DemoOutside, DemoWaterIds } from './water.ts'
 
 const hourMs = 3_600_000
 /** After this the agent that was left in the water is taken out. */
 const leftInWaterMinutes = 3 * 24 * 60
+/** How long before a bath the water is read and the machines are turned off. */
+const minutesBefore = 10
 
 /** What happens to an order of the practice scenario after it was written. */
 type Fate = 'draft' | 'proposal' | 'signed' | 'held' | 'discontinued' | 'first-given' | 'all-given'
@@ -149,9 +153,9 @@ const demoOrders: readonly DemoOrder[] = [
 /** Writes, signs, holds and doses the orders of the practice scenario through the services. */
 export async function seedOrders(
   composition: Composition,
-  outside: DemoOutside & { enclosureIds: ReadonlyMap<string, string> },
+  outside: DemoOutside & Pick<DemoWaterIds, 'enclosureIds' | 'waterBodyIds' | 'machineIds'>,
 ): Promise<void> {
-  const { orders, administrations, formulary, animals, parts } = composition
+  const { orders, administrations, formulary, animals, parts, water } = composition
   const { clock, now, people } = outside
   const as = (who: DemoPerson): RequestContext => ({
     actor: people[who as keyof DemoActors],
@@ -231,6 +235,7 @@ export async function seedOrders(
   /** Records the first dose with its own time, and the end of a timed bath. */
   async function dose(number: string, order: DemoOrder, lotId: string): Promise<void> {
     const startedAt = hours(order.startHours)
+    await makeReady(order, startedAt)
     clock.set(new Date(startedAt.getTime() + 10 * 60_000))
     const sheet = await administrations.queries.sheet(number, '1', false, as('tech'))
     const doseId = parts.ids.next()
@@ -251,5 +256,39 @@ export async function seedOrders(
       happenedAt: endedAt.toISOString(),
       ...(order.fields.contactMinutes ? {} : { rescue: 'Carbon back on and half of the water changed' }),
     })
+    await switchMachines(order, endedAt, true)
+  }
+
+  /** What the conditions of a bath ask for: the water read now, and off what takes the drug out of it or breaks it down. */
+  async function makeReady(order: DemoOrder, startedAt: Date): Promise<void> {
+    const at = new Date(startedAt.getTime() - minutesBefore * 60_000)
+    clock.set(at)
+    await switchMachines(order, at, false)
+    const [temperatureC, oxygenMgPerL] = order.enclosure === 'QT-4' ? ['14.3', '9.1'] : ['25.4', '6.8']
+    await water.services.measurements.recordReadings(as('tech'), {
+      waterBodyId: outside.waterBodyIds.get(order.enclosure) ?? '',
+      happenedAt: at.toISOString(),
+      readings: [
+        reading('temperature', temperatureC, 'degC'),
+        reading('dissolved-oxygen', oxygenMgPerL, 'mg/L'),
+      ],
+    })
+  }
+
+  function reading(parameter: ReadingParameter, value: string, unit: UnitCode) {
+    return { id: parts.ids.next(), parameter, value: { value, unit }, scale: null, instrument: 'Meter 4' }
+  }
+
+  async function switchMachines({ enclosure }: DemoOrder, at: Date, on: boolean): Promise<void> {
+    for (const kind of ['AC', 'UV', 'FF']) {
+      const id = outside.machineIds.get(enclosure.replace('QT', kind))
+      if (id === undefined) continue
+      await water.services.map.recordLifeSupportState(as('tech'), id, {
+        id: parts.ids.next(),
+        on,
+        happenedAt: at.toISOString(),
+        note: on ? 'On again after the bath' : 'Off for a bath',
+      })
+    }
   }
 }

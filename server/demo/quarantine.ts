@@ -143,6 +143,9 @@ function seahorses(parts: StoryParts): void {
   story.sample([4, '10:00'], [3, '16:00'], 'sample-2', { testKey: 'wet-mount', result: 'negative' })
 }
 
+/** Said on the day of a bath, which asks for it. */
+const fitForBath = { unwell: 0, handled: false }
+
 /** Under copper; three late animals of the shipment set its clock back, and an unexplained death extends it. */
 function reef(parts: StoryParts): void {
   const members = parts.batch('reef')
@@ -240,7 +243,10 @@ function sturgeon(parts: StoryParts): void {
   const story = createCaseTeller(parts, told)
   const death = parts.composition.parts.ids.next()
   const accession = members[0]?.accession ?? ''
-  story.looks('QT-4', [20, 0], '08:40', { not: [13], other: { 17: { feeding: 'some', signs: ['mucus'] } } })
+  story.looks('QT-4', [20, 0], '08:40', {
+    not: [13],
+    other: { 17: { feeding: 'some', signs: ['mucus'], ...fitForBath }, 2: fitForBath, 0: fitForBath },
+  })
   story.look(
     'QT-4',
     parts.times.at(13, '08:40'),
@@ -269,7 +275,13 @@ function rays(parts: StoryParts): void {
   const told = { name: 'Stingrays', protocol: 'QP-05', enclosure: 'QT-3', arrivedDaysAgo: 19, members }
   const story = createCaseTeller(parts, told)
   story.looks('QT-3', [18, 0], '09:00', {
-    other: { 18: { feeding: 'none' }, 17: { feeding: 'some' }, 16: { feeding: 'some' } },
+    other: {
+      18: { feeding: 'none' },
+      17: { feeding: 'some' },
+      16: { feeding: 'some' },
+      14: fitForBath,
+      0: fitForBath,
+    },
   })
   story.sample([16, '11:00'], [15, '12:00'], 'baseline', { testKey: 'baseline', result: 'negative' })
   story.step([14, '16:30'], 'prazi-1', '2 mg/L, left in the water')

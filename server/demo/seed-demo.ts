@@ -34,14 +34,18 @@ export async function seedDemo(outside: {
     const actors = await seedPeople(composition)
     await composition.formulary.service.loadDefaults()
     await seedFormulary(composition, actors, now)
-    const { enclosureIds, waterBodyIds } = await seedWater(composition, { clock, now, people: actors })
+    const { enclosureIds, waterBodyIds, machineIds } = await seedWater(composition, {
+      clock,
+      now,
+      people: actors,
+    })
     const taxa = await seedTaxa(composition, actors)
     const register = await seedRegister(composition, { clock, now, people: actors, taxa })
     const animals = { clock, now, people: actors, enclosureIds, taxa, enter: register.enter }
     const seeded = await seedAnimals(composition, animals)
     await register.depart(seeded)
     await seedQuarantine(composition, { clock, now, people: actors, seeded, enclosureIds, waterBodyIds })
-    await seedOrders(composition, { clock, now, people: actors, enclosureIds })
+    await seedOrders(composition, { clock, now, people: actors, enclosureIds, waterBodyIds, machineIds })
     await composition.close()
     return true
   } finally {

@@ -31,6 +31,7 @@ import { BodiesNamedAgain1764600000045 } from './0045-bodies-named-again.ts'
 import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
 import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
 import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
+import { WeakAndHandled1764600000053 } from './0053-weak-and-handled.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -68,4 +69,5 @@ export const migrations = [
   ContactsNeedAnEnd1764600000050,
   StandingLockLifts1764600000051,
   LiftsOneByOne1764600000052,
+  WeakAndHandled1764600000053,
 ]

@@ -201,7 +201,7 @@ export const BathSheet = z.object({
         help: z.string().nullable().describe('What was found'),
         resolve: z.array(z.string()).describe('What would resolve it'),
         place: z
-          .enum(['readings', 'volume', 'water', 'lot', 'second-calculation'])
+          .enum(['readings', 'volume', 'water', 'animals', 'lot', 'second-calculation'])
           .nullable()
           .describe('Where in the application it is resolved; null where it is done at the tank'),
         overridden: z.boolean().describe('Every stop of its rule was answered with a signed reason'),

@@ -29,6 +29,17 @@ const said = {
   words: z.string().trim().max(2000).nullable().describe('In the observer’s own words'),
   count: CountSaid,
   foundDead: HowMany.nullable().describe('Bodies found; null when nothing was said, which is not 0'),
+  // an entry that waits on a device since before there were these two says neither
+  unwell: HowMany.nullable()
+    .default(null)
+    .describe('How many are moribund or not eating; null when nothing was said, which is not 0'),
+  handled: z
+    .boolean()
+    .nullable()
+    .default(null)
+    .describe(
+      'Whether animals were netted, moved, examined or sampled in the last 24 h; null when nothing was said',
+    ),
   forVeterinarian: z.boolean().describe('Marked for the veterinarian; can wait for the round'),
   urgent: z.boolean().describe('Somebody is asked to come now'),
 }

@@ -9,6 +9,9 @@ const minutes = (count: number) => duration(count)
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
 const days = (count: number) => counted(count, 'day', 'days')
 
+/** A share that is too much, to a tenth and upwards, so that it never reads as the limit that it exceeds. */
+const shareAbove = (percent: number) => String(Math.ceil(Number((percent * 10).toPrecision(12))) / 10)
+
 /** Which dose comes after those that count already. */
 const nextOf = (p: { given: number; planned: number }) =>
   p.given < p.planned ? `the next is dose ${p.given + 1}` : 'none is left to come'
@@ -362,7 +365,7 @@ export const cautionTexts = defineMessages({
   'second-calculation': (p) =>
     `Because ${p.because}, another person works out the amount from the label, the mark and the container, without seeing the first result.`,
   'animals-unwell': (p) =>
-    `${p.percent} % of the animals are moribund or not eating, more than ${p.limitPercent} %.`,
+    `${shareAbove(p.percent)} % of the animals are moribund or not eating, more than ${p.limitPercent} %.`,
   'animals-unwell-unknown': (p) =>
     `The share of moribund or not eating animals is not recorded. More than ${p.limitPercent} % is too much.`,
   'animals-handled': () => 'The animals were handled within the last 24 hours.',

@@ -145,7 +145,8 @@ export const resolveWords = defineMessages({
   'determine-volume': 'Determine the volume of the water as it is connected now.',
   'calculate-again-by-another': 'Another person works out the amount, without seeing the first result.',
   'let-animals-rest': 'Let the animals recover first.',
-  'look-at-animals': 'Look at the animals, and record what you see.',
+  'look-at-animals':
+    'Look at the animals, and record how many are moribund or not eating and whether any were handled.',
 } satisfies Record<ResolveCode, string>)
 
 /** Thresholds by name, for settings and beside a caution. The unit is written by the formatter. */

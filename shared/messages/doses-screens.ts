@@ -29,6 +29,7 @@ export const sheetWords = defineMessages({
   toReadings: 'Enter a reading',
   toVolume: 'Go to the volume',
   toWater: 'Go to the water',
+  toAnimals: 'Write an observation',
   toSecond: 'Go to the second calculation',
   bottleClear: 'I looked: clear, not kept cold',
   bottleWhite: 'White precipitate in it',

@@ -54,6 +54,10 @@ export const observationSentences = defineMessages({
   estimatedSome: (p: { low: number; high: number }) => `${p.low} to ${p.high} animals estimated`,
   noneDead: 'No dead seen',
   foundDead: (p: { count: number }) => `${counted(p.count, 'animal', 'animals')} found dead`,
+  noneUnwell: 'None moribund or off its food',
+  unwell: (p: { count: number }) => `${counted(p.count, 'animal', 'animals')} moribund or not eating`,
+  handled: 'Handled in the last 24 h',
+  notHandled: 'None handled in the last 24 h',
   whose: (p: { count: number }) => `${p.count} of them not known whose`,
 })
 
@@ -66,6 +70,9 @@ interface Said {
   words: string | null
   count: { basis: CountBasis; low?: number; high?: number } | null
   foundDead: number | null
+  /** Absent in an entry that a device kept since before it could be said. */
+  unwell?: number | null
+  handled?: boolean | null
 }
 
 /** What was said in an observation, one part a piece, in the order of the form; what was not said is not there. */
@@ -85,6 +92,12 @@ export function sayObservation(said: Said): string[] {
     parts.push(
       foundDead === 0 ? observationSentences.noneDead : observationSentences.foundDead({ count: foundDead }),
     )
+  const { unwell = null, handled = null } = said
+  if (unwell !== null)
+    parts.push(
+      unwell === 0 ? observationSentences.noneUnwell : observationSentences.unwell({ count: unwell }),
+    )
+  if (handled !== null) parts.push(handled ? observationSentences.handled : observationSentences.notHandled)
   if (parts.length === 0 && said.words === null && said.lookedAt) parts.push(observationSentences.lookedAt)
   if (said.words !== null) parts.push(said.words)
   return parts

@@ -133,13 +133,18 @@ describe('a keeper with wet hands, at 390 px', () => {
     await expectSound(page, 'observation')
     await picture(page, 'observe')
     await page.getByRole('button', { name: /^All well/ }).click()
+    await page.getByText('Before a bath').click()
+    const weak = page.getByRole('group', { name: 'Moribund or not eating' })
+    await weak.getByRole('button', { name: 'One less' }).click()
+    await page.getByRole('radio', { name: 'None', exact: true }).last().click()
+    await page.getByText('Before a bath: 2 of 2 said').waitFor()
+    await expectSound(page, 'observation before a bath')
+    await picture(page, 'observe-before-bath')
     await page.getByRole('button', { name: /^Save at/ }).click()
     await page.waitForURL(/\/rounds$/)
     await page.getByText(new RegExp(`${code}: recorded at`)).waitFor()
-    expect(await seen()).toMatchObject({
-      total: 1,
-      rows: [{ feeding: 'all', breathing: 'normal', foundDead: 0, count: null, origin: 'online' }],
-    })
+    const said = { feeding: 'all', breathing: 'normal', foundDead: 0, count: null, origin: 'online' }
+    expect(await seen()).toMatchObject({ total: 1, rows: [{ ...said, unwell: 0, handled: false }] })
 
     // the worker that opens the application without a signal is there for whoever has signed in, on any sheet
     await page.goto(`${app.url}/rounds`)

@@ -64,6 +64,12 @@ describe('the practice scenario', () => {
       expect(phases, phase).toContain(phase)
   })
 
+  it('has doses that were given by the rules: no stop stands against one of them', async () => {
+    const { rows } = await composition.orders.queries.list({ limit: 50 })
+    expect(rows.filter(({ dosesGiven }) => dosesGiven > 0).length).toBeGreaterThanOrEqual(3)
+    expect(rows.filter(({ dosesIrregular }) => dosesIrregular > 0)).toEqual([])
+  })
+
   it('has cases in different states, each with a date that can be worked out by hand', async () => {
     const { rows, tally } = await composition.quarantine.queries.board({ view: 'all', limit: 50 })
     const told = (name: string) => {

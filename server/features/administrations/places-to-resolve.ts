@@ -16,6 +16,7 @@ export const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][num
   'part-the-water': 'water',
   'move-animals': 'water',
   'record-inhabitants': 'water',
+  'look-at-animals': 'animals',
   'carbon-off': 'water',
   'ozone-off': 'water',
   'uv-off': 'water',

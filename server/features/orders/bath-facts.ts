@@ -3,6 +3,7 @@ import { known, notApplicable, unknown } from '../../../shared/domain/cautions/f
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
+import { conditionBeforeBath } from '../../../shared/domain/observations/condition-before-bath.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -11,6 +12,7 @@ import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
 import type { WaterFacts, WaterQuestions } from '../water/index.ts'
 import { readAgentHistory } from './agent-history.ts'
 import { readExperiencedTaxa } from './agent-history.reads.ts'
+import { readStrength } from './strength.reads.ts'
 
 /** Salinities that part the kinds of water. Project default: no outside authority. */
 const freshBelow = 1
@@ -91,6 +93,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
         at,
         db,
       )
+      const strength = await strengthOf(animals, at, db)
       const zone = await parts.zone()
       const newTaxa =
         experienced &&
@@ -101,8 +104,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
         water: waterFacts(water, temperatures),
         animals: {
           inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
-          unwellPercent: unknown(),
-          handledInLast24h: unknown(),
+          unwellPercent: lookFact(strength.unwellPercent),
+          handledInLast24h: lookFact(strength.handled),
           withoutExperience: newTaxa
             ? known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here')
             : unknown(),
@@ -125,6 +128,18 @@ export function createBathFactsReader(parts: BathFactsParts) {
     },
   }
 }
+
+/** What looks of the last day say of everybody in the water, and of those who will be brought to it. */
+async function strengthOf(animals: readonly AnimalFacts[], at: Date, db: Db) {
+  const here = animals.flatMap(({ enclosureId, count }) =>
+    enclosureId === null ? [] : [{ enclosureId, low: count.low }],
+  )
+  const looks = await readStrength(db, [...new Set(here.map(({ enclosureId }) => enclosureId))], at)
+  return conditionBeforeBath(looks, here, at.toISOString())
+}
+
+const lookFact = <T>(said: { value: T; at: string | null } | null): Fact<T> =>
+  said ? known(said.value, said.at, 'the observations of the last 24 h') : unknown()
 
 export type BathFactsReader = ReturnType<typeof createBathFactsReader>
 

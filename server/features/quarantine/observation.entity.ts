@@ -26,6 +26,10 @@ export class ObservationRow extends RecordedFact {
   @Column({ type: 'integer', name: 'found_dead', nullable: true }) foundDead!: number | null
   /** Of these, bodies of which nobody could say whose they are. */
   @Column({ type: 'integer', name: 'unassigned_dead' }) unassignedDead!: number
+  /** Moribund or not eating. */
+  @Column({ type: 'integer', name: 'unwell_count', nullable: true }) unwell!: number | null
+  /** Netted, moved, examined or sampled within the last day. */
+  @Column({ type: 'boolean', nullable: true }) handled!: boolean | null
   @Column({ type: 'boolean', name: 'for_veterinarian' }) forVeterinarian!: boolean
   @Column({ type: 'boolean' }) urgent!: boolean
 }

@@ -31,6 +31,8 @@ export function presentObservation(row: ObservationReadRow): Observation {
     words: row.words,
     count: presentCount(row),
     foundDead: row.found_dead,
+    unwell: row.unwell_count,
+    handled: row.handled,
     unassignedDead: row.unassigned_dead,
     bodiesToName: row.bodies_to_name,
     bodies:

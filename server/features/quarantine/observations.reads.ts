@@ -31,6 +31,8 @@ export interface ObservationReadRow {
   count_low: number | null
   count_high: number | null
   found_dead: number | null
+  unwell_count: number | null
+  handled: boolean | null
   unassigned_dead: number
   for_veterinarian: boolean
   urgent: boolean
@@ -93,7 +95,7 @@ export function readObservations(db: Db, filter: ObservationsFilter): Promise<Ob
               AS case_numbers,
             o.happened_at, o.happened_on::text AS happened_on, o.said_at, o.time_doubtful, o.recorded_at,
             o.recorded_by, w.printed_name AS recorded_by_name, o.origin, o.looked_at, o.feeding, o.breathing, o.skin,
-            o.signs, o.words, o.count_basis, o.count_low, o.count_high, o.found_dead, o.unassigned_dead,
+            o.signs, o.words, o.count_basis, o.count_low, o.count_high, o.found_dead, o.unwell_count, o.handled, o.unassigned_dead,
             CASE WHEN v.id IS NULL THEN ${bodiesToName} ELSE 0 END AS bodies_to_name,
             b.named_in_all AS bodies_named, b.reason AS bodies_reason, bp.printed_name AS bodies_by,
             b.recorded_at AS bodies_at, o.for_veterinarian, o.urgent, rp.printed_name AS reviewed_by, r.recorded_at AS reviewed_at,

@@ -12,7 +12,7 @@ import {
 /** Whether this observation was written before; the same id with other content is refused. */
 export function isObservationRepeated(tx: Tx, row: ObservationRow): Promise<boolean> {
   const { id, enclosureId, saidAt, feeding, breathing, skin, words, countBasis, countLow, countHigh } = row
-  const { foundDead, lookedAt, forVeterinarian, urgent } = row
+  const { foundDead, unwell, handled, lookedAt, forVeterinarian, urgent } = row
   const content = {
     id,
     enclosureId,
@@ -25,7 +25,15 @@ export function isObservationRepeated(tx: Tx, row: ObservationRow): Promise<bool
     countLow,
     countHigh,
   }
-  return isRepeated(tx, ObservationRow, { ...content, foundDead, lookedAt, forVeterinarian, urgent })
+  return isRepeated(tx, ObservationRow, {
+    ...content,
+    foundDead,
+    unwell,
+    handled,
+    lookedAt,
+    forVeterinarian,
+    urgent,
+  })
 }
 
 export async function insertObservation(

@@ -39,14 +39,16 @@ export function createObservationsService(
   /** A registrar may flag what they saw; a round with counts and deaths is for those who look after animals. */
   function checkMayRecord(tx: Tx, given: Given): void {
     if (decide('observation.record', tx.actor.roles).allowed) return
-    const { lookedAt, feeding, breathing, skin, count, foundDead } = given
+    const { lookedAt, feeding, breathing, skin, count, foundDead, unwell, handled } = given
     const isRound =
       lookedAt ||
       feeding !== null ||
       breathing !== null ||
       skin !== null ||
       count !== null ||
-      foundDead !== null
+      foundDead !== null ||
+      unwell !== null ||
+      handled !== null
     if (isRound || !(given.forVeterinarian || given.urgent))
       throw new Problem('may-not', { detail: observationDetails.flagOnly })
   }
@@ -124,6 +126,8 @@ export function createObservationsService(
           countLow: count && count.basis !== 'not-counted' ? count.low : null,
           countHigh: count && count.basis !== 'not-counted' ? count.high : null,
           foundDead: given.foundDead,
+          unwell: given.unwell,
+          handled: given.handled,
           unassignedDead: (given.foundDead ?? 0) - named,
           forVeterinarian: given.forVeterinarian,
           urgent: given.urgent,

@@ -6,7 +6,7 @@ export type ObservationRefusal =
 
 /** Whether one thing at least has been said, so that there is something to save. */
 export function isSomethingSaid(said: ObservationSaid): boolean {
-  const { lookedAt, feeding, breathing, skin, signs, words, count, foundDead } = said
+  const { lookedAt, feeding, breathing, skin, signs, words, count, foundDead, unwell, handled } = said
   return (
     lookedAt ||
     feeding !== null ||
@@ -15,7 +15,9 @@ export function isSomethingSaid(said: ObservationSaid): boolean {
     signs.length > 0 ||
     (words ?? '').trim() !== '' ||
     count !== null ||
-    foundDead !== null
+    foundDead !== null ||
+    unwell !== null ||
+    handled !== null
   )
 }
 

@@ -53,6 +53,10 @@ export interface ObservationSaid {
   count: CountSaid
   /** Bodies found; null when nobody said, which is not 0. */
   foundDead: number | null
+  /** How many are moribund or not eating; null when nobody said, which is not 0. */
+  unwell: number | null
+  /** Whether animals were netted, moved, examined or sampled within the last day; null when nobody said. */
+  handled: boolean | null
   forVeterinarian: boolean
   urgent: boolean
 }
@@ -67,6 +71,8 @@ export const nothingSaid: ObservationSaid = {
   words: null,
   count: null,
   foundDead: null,
+  unwell: null,
+  handled: null,
   forVeterinarian: false,
   urgent: false,
 }

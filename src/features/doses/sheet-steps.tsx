@@ -70,6 +70,8 @@ function WhereToResolve({ step, sheet, lotId }: { step: Step; sheet: BathSheet; 
       return <ButtonLink to={paths.enclosureVolumes(enclosureCode)}>{words.toVolume}</ButtonLink>
     case 'water':
       return <ButtonLink to={paths.enclosure(enclosureCode)}>{words.toWater}</ButtonLink>
+    case 'animals':
+      return <ButtonLink to={paths.observe(enclosureCode)}>{words.toAnimals}</ButtonLink>
     case 'second-calculation':
       return sheet.first === null || sheet.first.mine ? null : (
         <ButtonLink to={`${paths.orderSheet(number)}?dose=${key}&part=second`}>{words.toSecond}</ButtonLink>

@@ -60,7 +60,7 @@ function countOf(draft: ObservationDraft): ObservationSaid['count'] | undefined 
 export const isCountOpen = (draft: ObservationDraft): boolean => countOf(draft) === undefined
 
 function saidOf(draft: ObservationDraft, urgent: boolean): ObservationSaid {
-  const { lookedAt, feeding, breathing, skin, signs, foundDead, forVeterinarian } = draft
+  const { lookedAt, feeding, breathing, skin, signs, foundDead, unwell, handled, forVeterinarian } = draft
   return {
     lookedAt,
     feeding,
@@ -70,6 +70,8 @@ function saidOf(draft: ObservationDraft, urgent: boolean): ObservationSaid {
     words: typedText(draft.words) ?? null,
     count: countOf(draft) ?? null,
     foundDead,
+    unwell,
+    handled,
     forVeterinarian,
     urgent,
   }
@@ -127,6 +129,9 @@ export function draftOf(body: ObservationBody): ObservationDraft {
     skin: body.skin,
     signs: body.signs,
     foundDead: body.foundDead,
+    // absent in an entry that a device kept since before they could be said
+    unwell: (body as Partial<ObservationBody>).unwell ?? null,
+    handled: (body as Partial<ObservationBody>).handled ?? null,
     forVeterinarian: body.forVeterinarian,
     words: body.words ?? '',
     countBasis: count?.basis ?? null,

@@ -78,7 +78,41 @@ export function RoundFields({ draft, onChange, animals }: FieldsProps) {
       <CountFields draft={draft} onChange={onChange} animals={animals} />
       <Stepper label={words.foundDead} value={draft.foundDead} onChange={(foundDead) => set({ foundDead })} />
       <WhoseFields draft={draft} onChange={onChange} animals={animals} />
+      <StrengthFields draft={draft} onChange={onChange} />
     </>
+  )
+}
+
+/** What a bath asks of the animals before it begins: how many are weak, and whether they were disturbed. */
+function StrengthFields({ draft, onChange }: Omit<FieldsProps, 'animals'>) {
+  const { unwell, handled } = draft
+  const [open, setOpen] = useState(unwell !== null || handled !== null)
+  const said = Number(unwell !== null) + Number(handled !== null)
+  return (
+    <details open={open} onToggle={({ currentTarget }) => setOpen(currentTarget.open)}>
+      <summary className="signs-summary">
+        {words.strength}
+        {said > 0 ? `: ${words.strengthSaid({ count: said })}` : ''}
+      </summary>
+      <div className="stack gap-4 pt-3">
+        <p className="hint">{words.strengthHint}</p>
+        <Stepper
+          label={words.unwell}
+          value={unwell}
+          onChange={(count) => onChange({ ...draft, unwell: count })}
+        />
+        <ChoiceField
+          label={words.handled}
+          touch
+          segments={[
+            { value: 'no', label: words.handledNo },
+            { value: 'yes', label: words.handledYes },
+          ]}
+          value={handled === null ? null : handled ? 'yes' : 'no'}
+          onChange={(next) => onChange({ ...draft, handled: next === 'yes' })}
+        />
+      </div>
+    </details>
   )
 }
 

@@ -19,11 +19,13 @@ describe('an observation', () => {
       { words: 'hides' },
       { signs: ['pale'] },
       { count: { basis: 'not-counted' } },
+      { unwell: 0 },
+      { handled: false },
     ] as Partial<ObservationSaid>[])
       expect(isSomethingSaid({ ...nothingSaid, ...said })).toBe(true)
   })
 
-  it('that all is well never says a count, a reading, a sign or the skin', () => {
+  it('that all is well never says a count, a reading, a sign, the skin, how many are weak or that none was handled', () => {
     expect(allWell).toEqual({
       lookedAt: true,
       feeding: 'all',
@@ -33,6 +35,8 @@ describe('an observation', () => {
       signs: [],
       words: null,
       count: null,
+      unwell: null,
+      handled: null,
       forVeterinarian: false,
       urgent: false,
     })
