@@ -100,6 +100,7 @@ export const everySheet = [
   { name: 'pharmacy', as: 'tech', address: '/pharmacy' },
   { name: 'formulary', as: 'tech', address: '/pharmacy/formulary' },
   { name: 'dose-line', as: 'tech', address: '/pharmacy/formulary/:id', list: '/api/formulary' },
+  { name: 'settings', as: 'vet', address: '/settings' },
   { name: 'settings-own', as: 'vet', address: '/settings/own' },
   { name: 'people', as: 'admin', address: '/settings/people' },
   { name: 'person-new', as: 'admin', address: '/settings/people/new' },

@@ -1,5 +1,11 @@
 import { defineMessages } from './define-messages.ts'
 
+/** What is wrong with a request that nothing could be read from. */
+export const bodyWords = defineMessages({
+  notJson: 'What was sent is not JSON: look at its brackets, commas and quotation marks.',
+  otherEncoding: 'What was sent is in another encoding. Send it as UTF-8, unpacked or packed with gzip.',
+})
+
 /** Titles of the refusals that cross the wire; the code in contracts/problems.ts is the key. Details say the next step. */
 export const problemTitles = defineMessages({
   'malformed-json': 'The request could not be read as JSON',

@@ -47,6 +47,7 @@ const sheetRoutes: RouteObject[] = [
   { path: 'pharmacy', loader: () => redirect(paths.formulary()) },
   { path: 'pharmacy/formulary', lazy: () => import('./routes/pharmacy/formulary.tsx') },
   { path: 'pharmacy/formulary/:id', lazy: () => import('./routes/pharmacy/dose-line.tsx') },
+  { path: 'settings', loader: () => redirect(paths.ownSettings()) },
   { path: 'settings/own', lazy: () => import('./routes/own-settings.tsx') },
   { path: 'settings/people', lazy: () => import('./routes/people.tsx') },
   { path: 'settings/people/new', lazy: () => import('./routes/new-person.tsx') },

@@ -48,6 +48,10 @@ describe.each([desk, phone])('sign-in at $width px', (size) => {
     await signIn(page, 'keeper@harrow-point.example')
     await page.getByRole('heading', { name: 'Your own settings' }).waitFor()
     expect(page.url()).toBe(`${app.url}/settings/own`)
+    // the address typed short leads there too
+    await page.goto(`${app.url}/settings`)
+    await page.getByRole('heading', { name: 'Your own settings' }).waitFor()
+    expect(page.url()).toBe(`${app.url}/settings/own`)
     expect(await page.title()).toBe('Your own settings · Pratique')
     await expectAccessible(page, 'own settings')
     expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(size.width)

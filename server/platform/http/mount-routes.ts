@@ -1,4 +1,3 @@
-import express from 'express'
 import type { Request, RequestHandler, Response, Router } from 'express'
 import { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
@@ -15,11 +14,10 @@ import { Problem } from './problem.ts'
 import { installation } from './request-context.ts'
 import type { RecordRequest, RequestContext } from './request-context.ts'
 import { requestIdOf } from './request-id.ts'
+import { readJson } from './read-json.ts'
 import type { FileReply, Route } from './route.ts'
 import { fieldProblems } from './to-problem.ts'
 import { findUnwritableText } from './unwritable-text.ts'
-
-const readJson = express.json({ limit: '1mb', strict: true })
 
 /** Called when somebody was refused by the permission table. */
 export type OnRefusal = (contract: Contract, person: SignedIn, requestId: string) => Promise<void>

@@ -2,11 +2,12 @@ import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'exp
 import type { z } from 'zod'
 import type { FieldProblem, ProblemBody } from '../../../shared/contracts/problems.ts'
 import { printWords } from '../../../shared/messages/print-problems.ts'
-import { problemTitles } from '../../../shared/messages/problems.ts'
+import { bodyWords, problemTitles } from '../../../shared/messages/problems.ts'
 import type { Log } from '../log.ts'
 import { Problem } from './problem.ts'
 import { PdfPoolBusy } from '../pdf/pdf-pool.ts'
 import { PdfRenderError } from '../pdf/pdf-render-error.ts'
+import { notInUtf8 } from './read-json.ts'
 import { requestIdOf } from './request-id.ts'
 
 /** Every issue of a failed parse as a pointer and a sentence, not only the first. */
@@ -42,8 +43,9 @@ function asProblem(error: unknown): Problem | null {
   if (error instanceof PdfPoolBusy) return new Problem('print-busy', { detail: printWords.busy })
   if (error instanceof PdfRenderError) return new Problem('print-failed', { detail: printWords[error.code] })
   const { type, status } = error as { type?: string; status?: number }
-  if (type === 'entity.parse.failed' || type === 'encoding.unsupported' || type === 'charset.unsupported')
-    return new Problem('malformed-json', { detail: 'Send JSON in UTF-8.' })
+  if (type === 'entity.parse.failed') return new Problem('malformed-json', { detail: bodyWords.notJson })
+  if (type === 'encoding.unsupported' || type === notInUtf8)
+    return new Problem('malformed-json', { detail: bodyWords.otherEncoding })
   if (type === 'entity.too.large')
     return new Problem('file-too-large', { detail: 'The request is over 1 MB.' })
   // Express refuses an address it cannot decode, such as /people/%
