@@ -135,7 +135,8 @@ export const BathSheet = z.object({
       }),
     )
     .describe('Lots of the product'),
-  lotId: RecordId.nullable().describe('Lot that it is worked out for; null: none chosen yet'),
+  lotId: RecordId.nullable().describe('Lot that it is worked out and judged for; null: none chosen yet'),
+  lotChanged: z.boolean().describe('That lot is not the one of the first calculation, which is made again'),
   targetText: z.string().describe('Signed target with its basis'),
   contactMinutes: z.number().nullable().describe('Contact time in minutes; null: left in the water'),
   stopIf: z.string().describe('When the bath is stopped at once'),

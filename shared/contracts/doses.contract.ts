@@ -22,6 +22,9 @@ export const getBathSheet = contract({
       .enum(['yes'])
       .optional()
       .describe('Leave every amount out; whoever asks for them is no blind second person any more'),
+    lot: RecordId.optional().describe(
+      'Lot in the hand, by which it is judged; without it that of the first calculation, else of the order',
+    ),
   }),
   reply: { 200: BathSheet },
   problems: ['not-found', 'broken-record'],

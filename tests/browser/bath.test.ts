@@ -155,6 +155,8 @@ describe('a bath at the tank', { timeout: patience }, () => {
     await tech
       .getByRole('combobox', { name: 'Lot in the hand' })
       .selectOption({ label: 'FM-2202, use by 31 Mar 2028' })
+    // it is judged by that one at once: at this bottle nobody has looked
+    await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).waitFor()
     await tech.getByRole('button', { name: 'Work it out with this lot' }).click()
     await tech.getByText(/Test technician, .*: 218\s?mL, lot FM-2202/).waitFor()
     await tech.getByRole('button', { name: 'I looked: clear, not kept cold' }).click()

@@ -8,7 +8,14 @@ import type { SheetPrinter } from './print-sheet.ts'
 import type { AdministrationsService } from './administrations.service.ts'
 
 export interface AdministrationsQueries {
-  sheet(number: string, key: string, blind: boolean, context: RequestContext): Promise<BathSheet>
+  /** @param lotId the lot in the hand, where somebody chose one */
+  sheet(
+    number: string,
+    key: string,
+    blind: boolean,
+    context: RequestContext,
+    lotId?: string,
+  ): Promise<BathSheet>
   sheetOfDose(doseId: string, context: RequestContext): Promise<BathSheet>
   due(query: QueryOf<typeof contracts.listDueDoses>): Promise<ReplyOf<typeof contracts.listDueDoses>['rows']>
 }
@@ -21,7 +28,7 @@ export function administrationRoutes(
   return [
     route(contracts.listDueDoses, async ({ query }) => ({ rows: await queries.due(query) })),
     route(contracts.getBathSheet, ({ params, query, context }) =>
-      queries.sheet(params.number, params.key, query.blind === 'yes', context),
+      queries.sheet(params.number, params.key, query.blind === 'yes', context, query.lot),
     ),
     route(contracts.printBathSheet, async ({ params, context }) => ({
       contentType: 'application/pdf',

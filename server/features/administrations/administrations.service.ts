@@ -187,8 +187,6 @@ export function createAdministrationsService(parts: AdministrationsParts) {
         const measured = situation.judgement?.dose?.measured
         if (measured && isOpen && !isAmountNow(situation, amount))
           why.push(doseWords.amountDiffers({ amount: `${measured.value} ${unitOf(measured.unit).symbol}` }))
-        const first = firstOf(calculations)
-        if (first && first.lot_id !== given.lotId) why.push(doseWords.secondOutdated)
         if (why.length > 0) throw new Problem('dose-not-possible', { detail: why.join(' '), extra: { why } })
         await writeDose(tx, situation, {
           id: given.id,

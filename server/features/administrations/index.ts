@@ -62,11 +62,15 @@ export function createAdministrations(
     calculations: (of, tx) => calculationsOf(tx.manager, of),
   })
   const now = () => clock.now()
-  /** A dose as it stands, worked out for the lot in the hand once there is a first calculation. */
-  async function read(number: string, key: string) {
+  /**
+   * A dose as it stands, worked out and judged for the lot in the hand: the one that somebody chose, else that of the
+   * first calculation. A lot of another product is none to judge by; giving from it is refused.
+   */
+  async function read(number: string, key: string, chosen: string | null) {
     const situation = await readDoseSituation(outside, number, key, now())
     const calculations = await calculationsOf(dataSource, situation)
-    const lotId = firstOf(calculations)?.lot_id ?? null
+    const isOfProduct = situation.product?.lots.some(({ id }) => id === chosen) ?? false
+    const lotId = (isOfProduct ? chosen : null) ?? firstOf(calculations)?.lot_id ?? null
     if (lotId === null || lotId === situation.content.fields.lotId) return { situation, calculations }
     return { situation: await readDoseSituation(outside, number, key, now(), { lotId }), calculations }
   }
@@ -74,8 +78,14 @@ export function createAdministrations(
    * The sheet for somebody. Whoever is shown the amount before the two calculations agree is remembered, for the other
    * doses to come as well, also those of another order for this drug and water: they have the same one. Whoever worked it out blind themselves has earned it.
    */
-  async function sheetFor(context: RequestContext, number: string, key: string, blind: boolean) {
-    const found = await read(number, key)
+  async function sheetFor(
+    context: RequestContext,
+    number: string,
+    key: string,
+    blind: boolean,
+    lotId?: string,
+  ) {
+    const found = await read(number, key, lotId ?? null)
     const { actor } = context
     const { versionId, row } = found.situation
     // a dose with a record is to come again where that is struck out
@@ -101,7 +111,8 @@ export function createAdministrations(
   parts.documents.prints.answerFor(sheetPrintKind, orders.answerForPrint)
   const due = { dataSource, queries: orders.queries, now }
   const queries: AdministrationsQueries = {
-    sheet: async (number, key, blind, context) => (await sheetFor(context, number, key, blind)).sheet,
+    sheet: async (number, key, blind, context, lotId) =>
+      (await sheetFor(context, number, key, blind, lotId)).sheet,
     /** Left without amounts: whoever ends a bath or strikes a record out may be the second person of the next. */
     async sheetOfDose(doseId, context) {
       const found = await readOrderNumberOfDose(dataSource, doseId)

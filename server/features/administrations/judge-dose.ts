@@ -45,6 +45,12 @@ function firstIsOutdated({ judgement }: DoseSituation, first: CalculationReadRow
   )
 }
 
+/** Whether the lot in the hand is not the one of the first calculation: it is made again with this one. */
+export function isOtherLot({ lotId }: Pick<DoseSituation, 'lotId'>, calculations: Calculations): boolean {
+  const first = firstOf(calculations)
+  return first !== undefined && first.lot_id !== lotId
+}
+
 /**
  * The signed reason that a stop at the dose was already answered with: for the same finding of the same rule, on the
  * facts that it was given for. A stop that did not stand at the signature was answered by nobody.
@@ -162,14 +168,15 @@ export function obstacles(
   for (const caution of answer?.cautions ?? [])
     if (caution.level === 'stop' && !answeredStop(situation, caution))
       why.push(sayObstacle(sayCaution(caution, zone)))
+  const otherLot = isOtherLot(situation, calculations)
   if (needsSecond(situation)) {
     const first = firstOf(calculations)
     const second = secondOf(calculations)
     if (!first || !second) why.push(doseWords.secondMissing)
-    else if (second.recorded_at < first.recorded_at || firstIsOutdated(situation, first))
+    else if (otherLot || second.recorded_at < first.recorded_at || firstIsOutdated(situation, first))
       why.push(doseWords.secondOutdated)
     else if (!secondStands(calculations)) why.push(doseWords.secondDisagrees)
-  }
+  } else if (otherLot) why.push(doseWords.secondOutdated)
   return why
 }
 

@@ -20,7 +20,7 @@ import type { CalculationReadRow, DoseReadRow } from './administrations.reads.ts
 import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
-import { answeredStop, needsSecond, obstacles } from './judge-dose.ts'
+import { answeredStop, isOtherLot, needsSecond, obstacles } from './judge-dose.ts'
 import { placesToResolve } from './places-to-resolve.ts'
 import { presentRecord, storedText } from './present-record.ts'
 import { runningBaths } from './running-baths.ts'
@@ -289,7 +289,8 @@ export function presentSheet(request: SheetRequest): BathSheet {
       state,
       expiresOn,
     })),
-    lotId: hideLot ? null : (first?.lot_id ?? fields.lotId),
+    lotId: hideLot ? null : situation.lotId,
+    lotChanged: !hideLot && isOtherLot(situation, calculations),
     targetText: isSound ? `${content.targetText} ${content.basisText}`.trim() : '',
     contactMinutes: situation.readable && course.timed ? fields.contactMinutes : null,
     stopIf: fields.stopIf,

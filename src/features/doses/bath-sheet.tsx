@@ -30,13 +30,22 @@ const lookAgainMs = 5_000
  */
 export function BathSheet({ number, doseKey, part }: { number: string; doseKey: string; part: SheetPart }) {
   const { zone } = useMe().facility
+  const dose = `${number} ${doseKey}`
+  const [chosen, setChosen] = useState<{ dose: string; lotId: string } | null>(null)
+  // a lot is chosen for one dose
+  const lotId = chosen?.dose === dose ? chosen.lotId : null
+  // while it is judged by another lot, what stood there stays
+  const placeholderData = (previous: BathSheetReply | undefined) =>
+    previous?.number === number && previous.key === doseKey ? previous : undefined
   const blind = useQuery({
-    ...sheetQuery(number, doseKey, true),
+    ...sheetQuery(number, doseKey, true, lotId),
+    placeholderData,
     refetchInterval: ({ state }) => (looksAgain(state.data, state.error) ? lookAgainMs : false),
   })
   const mode = blind.data ? sheetMode(blind.data, part) : null
   const whole = useQuery({
-    ...sheetQuery(number, doseKey, false),
+    ...sheetQuery(number, doseKey, false, lotId),
+    placeholderData,
     enabled: mode === 'whole',
     refetchInterval: ({ state }) => (state.data && othersMayAct(state.data) ? lookAgainMs : false),
   })
@@ -51,10 +60,12 @@ export function BathSheet({ number, doseKey, part }: { number: string; doseKey: 
   if (mode === 'blind') return <BlindSheet sheet={query.data} zone={zone} />
   return (
     <WholeSheet
-      key={`${number} ${doseKey}`}
+      key={dose}
       sheet={query.data}
       zone={zone}
       receivedMs={receivedMs}
+      chosenLot={lotId}
+      onLot={(next) => setChosen({ dose, lotId: next })}
       isKept={isUnanswered(query.error)}
       onLookAgain={() => void query.refetch()}
     />

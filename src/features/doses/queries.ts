@@ -9,12 +9,18 @@ export const dosesKey = ['doses'] as const
 /**
  * One planned dose, judged now. The blind sheet is kept apart from the whole one: whoever calculates a second time has
  * only the blind one on their device.
+ *
+ * @param lotId the lot in the hand, where somebody chose one: it is judged by that
  */
-export const sheetQuery = (number: string, key: string, blind: boolean) =>
+export const sheetQuery = (number: string, key: string, blind: boolean, lotId: string | null = null) =>
   queryOptions({
-    queryKey: [...dosesKey, number, key, blind ? 'blind' : 'whole'],
+    queryKey: [...dosesKey, number, key, blind ? 'blind' : 'whole', ...(lotId === null ? [] : [lotId])],
     queryFn: ({ signal }) =>
-      api(getBathSheet, { params: { number, key }, query: blind ? { blind: 'yes' as const } : {}, signal }),
+      api(getBathSheet, {
+        params: { number, key },
+        query: { ...(blind ? { blind: 'yes' as const } : {}), ...(lotId === null ? {} : { lot: lotId }) },
+        signal,
+      }),
     staleTime: 0,
   })
 

@@ -97,7 +97,7 @@ export function nextAct(sheet: BathSheet): NextAct {
     return sheet.contactMinutes === null && openRecord(sheet) !== null ? 'in-the-water' : 'done'
   if (sheet.state !== 'due') return 'closed'
   if (sheet.mayStart && sheet.first !== null) return 'give'
-  if (sheet.first === null) return 'calculate'
+  if (sheet.first === null || sheet.lotChanged) return 'calculate'
   if (!secondAgrees(sheet))
     return sheet.second !== null && sheet.second.at >= sheet.first.at && !sheet.second.agrees
       ? 'calculate'

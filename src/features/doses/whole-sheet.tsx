@@ -46,18 +46,22 @@ export function WholeSheet({
   sheet,
   zone,
   receivedMs,
+  chosenLot,
+  onLot,
   isKept = false,
   onLookAgain,
 }: {
   sheet: BathSheet
   zone: string
   receivedMs: number
+  /** The lot in the hand, where somebody chose one; the sheet is judged by it. */
+  chosenLot: string | null
+  onLot: (lotId: string) => void
   /** Nobody answers, and it stands as it was. */
   isKept?: boolean
   onLookAgain: () => void
 }) {
   const [front, setFront] = useState<Front | null>(null)
-  const [chosenLot, setChosenLot] = useState<string | null>(null)
   const lotId = chosenLot ?? lotToOpen(sheet)
   const act = nextAct(sheet)
   const bath = ownBath(sheet)
@@ -136,7 +140,7 @@ export function WholeSheet({
             <SheetSteps sheet={sheet} lotId={lotId === '' ? null : lotId} />
             <CautionsNow sheet={sheet} />
             <Amounts sheet={sheet} />
-            <FirstCalculation sheet={sheet} zone={zone} lotId={lotId} onLot={setChosenLot} />
+            <FirstCalculation sheet={sheet} zone={zone} lotId={lotId} onLot={onLot} />
             <SecondStanding sheet={sheet} zone={zone} />
             <InTheWay sheet={sheet} act={act} />
             {act === 'give' && sheet.may.includes('dose.give') ? (

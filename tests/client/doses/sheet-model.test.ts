@@ -170,6 +170,8 @@ describe('the next act at the tank', () => {
     expect(nextAct(sheet({ first }))).toBe('wait-for-second')
     expect(nextAct(sheet({ first, second }))).toBe('resolve')
     expect(nextAct(sheet({ first, second, mayStart: true }))).toBe('give')
+    // another lot in the hand is worked out anew
+    expect(nextAct(sheet({ first, second, lotChanged: true }))).toBe('calculate')
     expect(nextAct(sheet({ first, second, state: 'running', recorded: [record()] }))).toBe('running')
     const over = record({ stop: ended })
     expect(nextAct(sheet({ state: 'done', recorded: [over] }))).toBe('done')
