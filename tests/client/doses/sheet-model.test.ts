@@ -112,6 +112,7 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   steps: [],
   record: 'intact',
   secondNeeded: true,
+  lotChanged: false,
   first: null,
   second: null,
   secondShut: null,
