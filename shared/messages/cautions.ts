@@ -146,7 +146,7 @@ export const resolveWords = defineMessages({
   'calculate-again-by-another': 'Another person works out the amount, without seeing the first result.',
   'let-animals-rest': 'Let the animals recover first.',
   'look-at-animals':
-    'Look at the animals, and record how many are moribund or not eating and whether any were handled.',
+    'Look at the animals, and record how many are moribund or not eating and whether any were handled, as an observation at each enclosure of this water. It counts for a day.',
 } satisfies Record<ResolveCode, string>)
 
 /** Thresholds by name, for settings and beside a caution. The unit is written by the formatter. */

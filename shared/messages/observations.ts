@@ -75,6 +75,17 @@ interface Said {
   handled?: boolean | null
 }
 
+/** How many are weak and whether any were handled, as far as it was said. */
+export function sayStrength({ unwell = null, handled = null }: Pick<Said, 'unwell' | 'handled'>): string[] {
+  const parts: string[] = []
+  if (unwell !== null)
+    parts.push(
+      unwell === 0 ? observationSentences.noneUnwell : observationSentences.unwell({ count: unwell }),
+    )
+  if (handled !== null) parts.push(handled ? observationSentences.handled : observationSentences.notHandled)
+  return parts
+}
+
 /** What was said in an observation, one part a piece, in the order of the form; what was not said is not there. */
 export function sayObservation(said: Said): string[] {
   const { count, foundDead } = said
@@ -92,12 +103,7 @@ export function sayObservation(said: Said): string[] {
     parts.push(
       foundDead === 0 ? observationSentences.noneDead : observationSentences.foundDead({ count: foundDead }),
     )
-  const { unwell = null, handled = null } = said
-  if (unwell !== null)
-    parts.push(
-      unwell === 0 ? observationSentences.noneUnwell : observationSentences.unwell({ count: unwell }),
-    )
-  if (handled !== null) parts.push(handled ? observationSentences.handled : observationSentences.notHandled)
+  parts.push(...sayStrength(said))
   if (parts.length === 0 && said.words === null && said.lookedAt) parts.push(observationSentences.lookedAt)
   if (said.words !== null) parts.push(said.words)
   return parts

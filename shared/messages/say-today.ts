@@ -11,7 +11,7 @@ import { discrepancySentences } from './animal-log.ts'
 import { capital } from './capital.ts'
 import { counted, defineMessages } from './define-messages.ts'
 import { agentNames } from './formulary.ts'
-import { breathingWords, feedingWords, skinWords } from './observations.ts'
+import { breathingWords, feedingWords, sayStrength, skinWords } from './observations.ts'
 import { transactionKindNames } from './register-kinds.ts'
 import { sayDate, sayTime } from './say-date.ts'
 import { settingNames } from './settings.ts'
@@ -234,6 +234,10 @@ const observed = defineMessages({
       t.has('breathing') && breathingWords[t.text('breathing') as Breathing],
       t.has('skin') && skinWords[t.text('skin') as Skin],
       t.number('dead') > 0 && `${counted(t.number('dead'), 'animal', 'animals')} found dead`,
+      ...sayStrength({
+        unwell: t.has('unwell') ? t.number('unwell') : null,
+        handled: t.has('handled') ? t.text('handled') === 'yes' : null,
+      }),
       t.has('words') && `“${t.text('words')}”`,
     ]
       .filter(Boolean)

@@ -148,10 +148,9 @@ function presentSteps(
   zone: string,
 ): BathSheet['steps'] {
   const found = situation.answer?.cautions ?? []
-  const fired = new Map(found.map((one) => [one.ruleId as string, one]))
   const agreed = secondStands(calculations)
   return situation.content.conditions.map((condition) => {
-    const caution = fired.get(condition.ruleId)
+    const fired = found.filter((one) => one.ruleId === condition.ruleId)
     const { ruleId, level, text } = condition
     if (condition.secondCalculation)
       return {
@@ -164,7 +163,7 @@ function presentSteps(
         place: 'second-calculation' as const,
         overridden: false,
       }
-    if (!caution)
+    if (fired.length === 0)
       return {
         ruleId,
         level,
@@ -175,20 +174,23 @@ function presentSteps(
         place: null,
         overridden: false,
       }
-    const said = sayCaution(caution, zone)
+    // a rule may find several things: whoever resolves one of them knows of the other
+    const said = fired.map((one) => sayCaution(one, zone))
     return {
       ruleId,
       level,
       text,
-      state: caution.unknownFacts.length > 0 ? ('unknown' as const) : ('unmet' as const),
-      help: said.text,
-      resolve: said.resolves,
+      state: fired.every((one) => one.unknownFacts.length > 0) ? ('unknown' as const) : ('unmet' as const),
+      help: [...new Set(said.map(({ text: words }) => words))].join(' '),
+      resolve: [...new Set(said.flatMap(({ resolves }) => resolves))],
       overridden: isAnswered(
         situation,
-        found.filter((one) => one.ruleId === condition.ruleId && one.level === 'stop'),
+        fired.filter((one) => one.level === 'stop'),
       ),
       place:
-        caution.resolvedBy.map((code) => placesToResolve[code]).find((place) => place !== undefined) ?? null,
+        fired
+          .flatMap((one) => one.resolvedBy.map((code) => placesToResolve[code]))
+          .find((place) => place !== undefined) ?? null,
     }
   })
 }

@@ -10,6 +10,7 @@ import { presentCount, presentNewestWeight } from './animals.present.ts'
 import { readAnimals } from './animals.reads.ts'
 import type { AnimalReadRow } from './animals.reads.ts'
 import { countOpenDiscrepancies, readDeaths, readDiscrepancies, readLocksFrom } from './chart.reads.ts'
+import { readHandling, readWhereabouts } from './handled.reads.ts'
 import { readStaysIn } from './stays.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 
@@ -160,6 +161,25 @@ export function createAnimalQuestions(parts: { dataSource: Db }) {
         until: row.until_at?.toISOString() ?? null,
       }))
     },
+
+    /** Where these animals were since an instant, also as part of the group that they were taken out of. */
+    async whereabouts(animalIds: readonly string[], from: Date, db: Db = parts.dataSource) {
+      const rows = await readWhereabouts(db, animalIds, from)
+      return rows.map((row) => ({
+        animalId: row.animal_id,
+        asId: row.as_id,
+        enclosureId: row.enclosure_id,
+        from: row.from_at.toISOString(),
+        until: row.until_at?.toISOString() ?? null,
+      }))
+    },
+
+    /** When these animals were moved, weighed or joined by others, as it was recorded; the own moves of a bath left out. */
+    handling: (
+      animalIds: readonly string[],
+      during: { from: Date; at: Date; exceptInto: string | null },
+      db: Db = parts.dataSource,
+    ) => readHandling(db, animalIds, during),
 
     /** Every stay of these animals, the earliest first. */
     async staysOf(animalIds: readonly string[], db: Db = parts.dataSource) {

@@ -3,16 +3,16 @@ import { known, notApplicable, unknown } from '../../../shared/domain/cautions/f
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
-import { conditionBeforeBath } from '../../../shared/domain/observations/condition-before-bath.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
-import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
+import type { AnimalFacts } from '../animals/index.ts'
 import type { WaterFacts, WaterQuestions } from '../water/index.ts'
 import { readAgentHistory } from './agent-history.ts'
 import { readExperiencedTaxa } from './agent-history.reads.ts'
-import { readStrength } from './strength.reads.ts'
+import { readCondition } from './condition.ts'
+import type { ConditionParts } from './condition.ts'
 
 /** Salinities that part the kinds of water. Project default: no outside authority. */
 const freshBelow = 1
@@ -32,10 +32,9 @@ export interface BathSituation {
 export const isVessel = (water: WaterFacts): boolean =>
   water.enclosures.some(({ id, treatmentVessel }) => id === water.enclosureId && treatmentVessel)
 
-export interface BathFactsParts {
+export interface BathFactsParts extends ConditionParts {
   dataSource: Db
   water: WaterQuestions
-  animals: AnimalQuestions
   zone(): Promise<string>
 }
 
@@ -93,7 +92,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
         at,
         db,
       )
-      const strength = await strengthOf(animals, at, db)
+      const exceptInto = isVessel(water) ? water.enclosureId : null
+      const condition = await readCondition(parts, { animals, exceptInto }, at, db)
       const zone = await parts.zone()
       const newTaxa =
         experienced &&
@@ -104,8 +104,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
         water: waterFacts(water, temperatures),
         animals: {
           inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
-          unwellPercent: lookFact(strength.unwellPercent),
-          handledInLast24h: lookFact(strength.handled),
+          unwellPercent: lookFact(condition.unwellPercent),
+          handledInLast24h: lookFact(condition.handled),
           withoutExperience: newTaxa
             ? known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here')
             : unknown(),
@@ -129,17 +129,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
   }
 }
 
-/** What looks of the last day say of everybody in the water, and of those who will be brought to it. */
-async function strengthOf(animals: readonly AnimalFacts[], at: Date, db: Db) {
-  const here = animals.flatMap(({ enclosureId, count }) =>
-    enclosureId === null ? [] : [{ enclosureId, low: count.low }],
-  )
-  const looks = await readStrength(db, [...new Set(here.map(({ enclosureId }) => enclosureId))], at)
-  return conditionBeforeBath(looks, here, at.toISOString())
-}
-
-const lookFact = <T>(said: { value: T; at: string | null } | null): Fact<T> =>
-  said ? known(said.value, said.at, 'the observations of the last 24 h') : unknown()
+const lookFact = <T>(said: { value: T; at: string | null; source: string } | null): Fact<T> =>
+  said ? known(said.value, said.at, said.source) : unknown()
 
 export type BathFactsReader = ReturnType<typeof createBathFactsReader>
 

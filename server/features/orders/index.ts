@@ -10,6 +10,7 @@ import type { Documents } from '../documents/index.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { Formulary } from '../formulary/index.ts'
+import { readSamplesTaken } from '../quarantine/index.ts'
 import type { TreatmentsService } from '../quarantine/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import type { Water } from '../water/index.ts'
@@ -66,6 +67,7 @@ export function createOrders(parts: OrdersOutside) {
     dataSource,
     water: parts.water.questions,
     animals: parts.animals.questions,
+    samplesTaken: readSamplesTaken,
     zone: () => facility.zone(),
   })
   const situation = {

@@ -39,6 +39,7 @@ import { createTreatmentsService } from './treatments.service.ts'
 import { createUnnamedBodies } from './unnamed-bodies.ts'
 
 export { verifySignedEvents } from './verify-signed-events.ts'
+export { readSamplesTaken } from './samples.reads.ts'
 export type { OutsideCaseRow } from './outside-cases.reads.ts'
 export type { TreatmentsService } from './treatments.service.ts'
 export type { CaseEventFacts } from './case-event-facts.ts'

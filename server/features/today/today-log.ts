@@ -29,6 +29,8 @@ export function todayLog(
           ...(one.breathing === null ? {} : { breathing: one.breathing }),
           ...(one.skin === null ? {} : { skin: one.skin }),
           dead: one.foundDead ?? 0,
+          ...(one.unwell === null ? {} : { unwell: one.unwell }),
+          ...(one.handled === null ? {} : { handled: one.handled ? 'yes' : 'no' }),
           ...(one.words === null ? {} : { words: one.words }),
         },
       })),

@@ -15,6 +15,11 @@ export interface CountHere {
   enclosureId: string
   /** The smallest number that the ledger allows, in whole animals. */
   low: number
+  /**
+   * Where they were within the last day, also as part of the group that they were taken out of: a look tells of them
+   * where they were then. Without it they were where they are.
+   */
+  stays?: readonly { enclosureId: string; from: string; until: string | null }[]
 }
 
 interface Said<T> {
@@ -24,6 +29,19 @@ interface Said<T> {
 }
 
 const hourMs = 3_600_000
+
+/** Whether animals were in the enclosure when it was looked at. */
+function tellsOf(look: StrengthSaid, { enclosureId, stays }: CountHere): boolean {
+  if (!stays) return look.enclosureId === enclosureId
+  const at = Date.parse(look.at)
+  return stays.some(
+    (stay) =>
+      stay.enclosureId === look.enclosureId &&
+      Date.parse(stay.from) <= at &&
+      (stay.until === null || at < Date.parse(stay.until)),
+  )
+}
+
 const oldest = (looks: readonly StrengthSaid[]) => looks.map(({ at }) => at).sort()[0] ?? null
 
 /**
@@ -32,9 +50,9 @@ const oldest = (looks: readonly StrengthSaid[]) => looks.map(({ at }) => at).sor
  * @param looks   looks that were not struck out, in any order
  * @param animals who is in the water, or will be brought to it
  * @param at      ISO instant at which the bath begins
- * @returns `unwellPercent`: share of moribund or not eating animals, 0 to 100, from the newest look in each enclosure
- *          that says it, by the smallest number of animals that the ledger allows, so that it errs towards many; null
- *          unless a look in every enclosure says it. `handled`: true as soon as one look says so, false only where the
+ * @returns `unwellPercent`: share of moribund or not eating animals, 0 to 100, from the newest look that says it of
+ *          each, at home too where they were brought from there, by the smallest number of animals that the ledger allows, so that it errs towards many; null
+ *          unless a look says it of everybody. `handled`: true as soon as one look says so, false only where the
  *          newest look in every enclosure that says anything of it says no; null otherwise
  */
 export function conditionBeforeBath(
@@ -43,15 +61,14 @@ export function conditionBeforeBath(
   at: string,
 ): { unwellPercent: Said<number> | null; handled: Said<boolean> | null } {
   const until = Date.parse(at)
-  const enclosures = [...new Set(animals.map(({ enclosureId }) => enclosureId))]
   const isInTime = (look: StrengthSaid) =>
     Date.parse(look.at) <= until && until - Date.parse(look.at) <= lookCountsForHours * hourMs
   const there = looks
-    .filter((look) => isInTime(look) && enclosures.includes(look.enclosureId))
-    .sort((a, b) => Date.parse(b.at) - Date.parse(a.at))
+    .filter((look) => isInTime(look) && animals.some((one) => tellsOf(look, one)))
+    .sort((a, b) => Date.parse(b.at) - Date.parse(a.at) || (b.unwell ?? 0) - (a.unwell ?? 0))
   const newestOfEach = (says: (look: StrengthSaid) => boolean): StrengthSaid[] | null => {
-    const found = enclosures.map((id) => there.find((look) => look.enclosureId === id && says(look)))
-    return found.every((look) => look !== undefined) ? found : null
+    const found = animals.map((one) => there.find((look) => tellsOf(look, one) && says(look)))
+    return found.every((look) => look !== undefined) ? [...new Set(found)] : null
   }
 
   const counted = newestOfEach(({ unwell }) => unwell !== null)

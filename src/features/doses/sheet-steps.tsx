@@ -71,7 +71,12 @@ function WhereToResolve({ step, sheet, lotId }: { step: Step; sheet: BathSheet; 
     case 'water':
       return <ButtonLink to={paths.enclosure(enclosureCode)}>{words.toWater}</ButtonLink>
     case 'animals':
-      return <ButtonLink to={paths.observe(enclosureCode)}>{words.toAnimals}</ButtonLink>
+      return (
+        <span className="open-step">
+          <span>{step.resolve.join(' ')}</span>
+          <ButtonLink to={paths.observe(enclosureCode)}>{words.toAnimals}</ButtonLink>
+        </span>
+      )
     case 'second-calculation':
       return sheet.first === null || sheet.first.mine ? null : (
         <ButtonLink to={`${paths.orderSheet(number)}?dose=${key}&part=second`}>{words.toSecond}</ButtonLink>

@@ -89,8 +89,7 @@ export function DoseCalendar({
               <StepPicture state={standing.mark} />
               <span>
                 <b>{words.dose({ key: dose.key })}</b> <span className="num">{say(dose.dueAt)}</span>
-                {', '}
-                {dose.records.length === 0 ? what : null}
+                {dose.records.length === 0 ? `, ${what}` : null}{' '}
                 {dose.records.length > 1 ? (
                   <b className="text-magenta">{words.severalRecords({ count: dose.records.length })}</b>
                 ) : null}

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { conditionBeforeBath } from '../../../shared/domain/observations/condition-before-bath.ts'
-import type { StrengthSaid } from '../../../shared/domain/observations/condition-before-bath.ts'
+import type { CountHere, StrengthSaid } from '../../../shared/domain/observations/condition-before-bath.ts'
 
 const at = '2026-12-01T18:00:00Z'
 const look = (said: Partial<StrengthSaid>): StrengthSaid => ({
@@ -12,7 +12,8 @@ const look = (said: Partial<StrengthSaid>): StrengthSaid => ({
 })
 const school = { enclosureId: 'a', low: 40 }
 const ray = { enclosureId: 'b', low: 1 }
-const judge = (looks: StrengthSaid[], animals = [school]) => conditionBeforeBath(looks, animals, at)
+const judge = (looks: StrengthSaid[], animals: CountHere[] = [school]) =>
+  conditionBeforeBath(looks, animals, at)
 
 describe('the share of weak animals before a bath', () => {
   it('is what the newest look that says it counted, of the animals in the ledger', () => {
@@ -74,5 +75,54 @@ describe('handling within a day before a bath', () => {
     expect(judge([no, look({ enclosureId: 'b', handled: false })], [school, ray]).handled?.value).toBe(false)
     expect(judge([look({ unwell: 0 })]).handled).toBeNull()
     expect(judge([]).handled).toBeNull()
+  })
+})
+
+describe('animals that were elsewhere within the day', () => {
+  const moved = {
+    enclosureId: 'tub',
+    low: 10,
+    stays: [
+      { enclosureId: 'home', from: '2026-11-01T00:00:00Z', until: '2026-12-01T16:00:00Z' },
+      { enclosureId: 'tub', from: '2026-12-01T16:00:00Z', until: null },
+    ],
+  }
+  const atHome = (made: string, unwell: number, handled = false) =>
+    look({ enclosureId: 'home', at: made, unwell, handled })
+  const inTub = (made: string, unwell: number) => look({ enclosureId: 'tub', at: made, unwell })
+  const before = '2026-12-01T12:00:00Z'
+  const after = '2026-12-01T17:00:00Z'
+
+  it('are told of by the looks where they were then, and by nobody else', () => {
+    expect(judge([atHome(before, 1)], [moved])).toMatchObject({
+      unwellPercent: { value: 10, at: before },
+      handled: { value: false },
+    })
+    // those who are left at home tell nothing of them, and the tub before they came as little
+    expect(judge([atHome(after, 1)], [moved]).unwellPercent).toBeNull()
+    expect(judge([atHome('2026-12-01T16:00:00Z', 1)], [moved]).unwellPercent).toBeNull()
+    expect(judge([inTub(before, 1)], [moved]).unwellPercent).toBeNull()
+    expect(judge([atHome(before, 1), inTub(after, 0)], [moved]).unwellPercent?.value).toBe(0)
+  })
+
+  it('were handled where a look there says so while they were there', () => {
+    expect(judge([atHome(before, 0, true)], [moved]).handled?.value).toBe(true)
+    expect(judge([atHome(after, 0, true)], [moved]).handled).toBeNull()
+  })
+
+  it('joined others: the look before they came tells of the others alone', () => {
+    const there = {
+      enclosureId: 'tub',
+      low: 30,
+      stays: [{ enclosureId: 'tub', from: '2026-11-01T00:00:00Z', until: null }],
+    }
+    const both: CountHere[] = [there, moved]
+    expect(judge([inTub(before, 0)], both).unwellPercent).toBeNull()
+    expect(judge([inTub(before, 3), atHome(before, 1)], both).unwellPercent?.value).toBe(10)
+    expect(judge([inTub(before, 3), inTub(after, 1)], both).unwellPercent?.value).toBe(2.5)
+  })
+
+  it('of two looks at one time the worse counts', () => {
+    expect(judge([look({ unwell: 0 }), look({ unwell: 20 })]).unwellPercent?.value).toBe(50)
   })
 })
