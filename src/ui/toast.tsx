@@ -22,12 +22,12 @@ export function ToastProvider({ children }: { children: ReactNode }) {
 
   return (
     <ToastContext value={say}>
-      {children}
       <div className="toasts" role="status" aria-live="polite">
         {toasts.map((toast) => (
           <Toast key={toast.key} toast={toast} onGone={() => drop(toast.key)} />
         ))}
       </div>
+      {children}
     </ToastContext>
   )
 }

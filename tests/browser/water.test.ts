@@ -2,7 +2,7 @@ import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { anEnclosure, aValve, aWaterBody } from '../builders/a-water.ts'
 import { launchChromium } from '../support/chromium.ts'
-import { deskSize, expectSound, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -180,4 +180,35 @@ describe.each([
     await page.getByText(`Sump ${sump}`).first().waitFor()
     await expectSound(page, 'map of the water')
   })
+})
+
+it('says on a phone that it is done where no button of the next form is covered', async () => {
+  const page = await signedIn('keeper', phone, '/enclosures/QT-5/measure')
+  await page.getByRole('textbox', { name: 'Dissolved oxygen' }).fill('6.90')
+  await page.getByRole('textbox', { name: 'Instrument or kit' }).fill('Meter 4')
+  await page.getByRole('button', { name: /Record 1\sreading/ }).click()
+  const toast = page.locator('.toast')
+  await toast.waitFor()
+  await page.getByRole('link', { name: 'Add readings' }).first().click()
+  await page.getByRole('textbox', { name: 'Dissolved oxygen' }).fill('6.80')
+  const submit = page.getByRole('button', { name: /Record 1\sreading/ })
+  // at the top of the form nothing that can be pressed lies below it
+  const covered = await toast.evaluate((one) => {
+    const of = (each: Element) => each.getBoundingClientRect()
+    const it = of(one)
+    return [
+      ...document.querySelectorAll('main button, main a, main input, main select, header button, header a'),
+    ]
+      .filter((each) => !one.contains(each))
+      .filter((each) => {
+        const { left, right, top, bottom } = of(each)
+        return right > it.left && left < it.right && bottom > it.top && top < it.bottom
+      })
+      .map((each) => each.outerHTML.slice(0, 120))
+  })
+  await picture(page, 'toast')
+  expect(covered).toEqual([])
+  await submit.scrollIntoViewIfNeeded()
+  const [a, b] = [await toast.boundingBox(), await submit.boundingBox()]
+  expect(a && b && (a.y + a.height <= b.y || b.y + b.height <= a.y)).toBe(true)
 })

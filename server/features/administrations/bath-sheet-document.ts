@@ -20,6 +20,7 @@ import { workingBlock } from '../../platform/pdf/working-block.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
+import { bathBlocks, calculationBlocks } from './bath-paper-records.ts'
 
 type SheetCaution = BathSheet['cautions'][number]
 
@@ -128,35 +129,15 @@ function conditionsBlock({ sheet }: BathPaper): DocumentBlock {
 const listed = (heading: string, blocks: DocumentBlock[]): DocumentBlock[] =>
   blocks.length === 0 ? [] : [{ kind: 'heading', text: heading }, ...blocks]
 
-function calculationsBlock({ sheet }: BathPaper): DocumentBlock {
-  const unit = sheet.amountNow?.unit ?? 'g'
-  const pen = { pen: true } as const
-  const measure = { pen: true, unit: formatDose('1', unit as UnitCode).symbol } as const
-  return {
-    kind: 'table',
-    boxed: true,
-    columns: [
-      { head: '', share: 0.7 },
-      { head: bathPaper.person, share: 1.5 },
-      { head: bathPaper.enclosureRead, share: 1.1 },
-      { head: bathPaper.markRead, share: 1 },
-      { head: bathPaper.containerRead, share: 1.6 },
-      { head: bathPaper.amountRead, share: 1.2 },
-    ],
-    rows: [
-      [bathPaper.first, pen, pen, pen, pen, measure],
-      [bathPaper.second, pen, pen, pen, pen, measure],
-    ],
-    emptyText: '',
-  }
-}
-
 const standsInTheWay = (sheet: BathSheet, caution: SheetCaution) => sheet.why.includes(sayObstacle(caution))
 
 const cautionLine = ({ title, text }: SheetCaution) => [
   { text: `${title}.`, bold: true },
   { text: ` ${text}` },
 ]
+
+/** An edge is not divided between pages: with more in it, a long list would leave most of a page empty. */
+const mostInOneEdge = 3
 
 /** Neighbours of one level in one edge, so that an ordinary dose has them all on the page of its amount. */
 function cautionBlocks(cautions: readonly SheetCaution[]): DocumentBlock[] {
@@ -174,7 +155,7 @@ function cautionBlocks(cautions: readonly SheetCaution[]): DocumentBlock[] {
           { text: orderPaper.reason({ reason: caution.overridden.reason }) },
         ],
       })
-    else if (before?.level === caution.level && !before.override)
+    else if (before?.level === caution.level && !before.override && before.lines.length < mostInOneEdge)
       blocks[blocks.length - 1] = { ...before, lines: [...before.lines, line] }
     else blocks.push({ kind: 'caution', level: caution.level, lines: [line] })
   }
@@ -209,29 +190,11 @@ const aloneBlock = ({ sheet }: BathPaper): DocumentBlock[] => {
     : [{ kind: 'caution', level: 'warning', title: doseWords.calculatedAlone, lines: [alone] }]
 }
 
-function duringBlock(): DocumentBlock {
-  const pen = { pen: true } as const
-  const row = [pen, { pen: true, unit: 'mg/L' } as const, { pen: true, unit: '°C' } as const, pen]
-  return {
-    kind: 'table',
-    boxed: true,
-    columns: [
-      { head: bathPaper.time, share: 0.8 },
-      { head: bathPaper.oxygen, share: 1 },
-      { head: bathPaper.temperature, share: 1 },
-      { head: bathPaper.behaviour, share: 3 },
-    ],
-    rows: [row, row, row],
-    emptyText: '',
-  }
-}
-
 /** One dose on paper for the tank: what to weigh and why, what has to be true, when to stop, and lines for the pen. */
 export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
   const { sheet, content, block } = paper
   const short = formatFingerprint(block.hash)
   const notice = paper.notice ?? (sheet.why.length > 0 ? bathPaper.notReady : null)
-  const unit = formatDose('1', (sheet.amountNow?.unit ?? 'g') as UnitCode).symbol
   return {
     title: bathPaper.title({ number: sheet.number, dose: sheet.key }),
     language: 'en',
@@ -294,39 +257,8 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       ),
       // a page of its own, without the amount, that can be handed to the second person
       { kind: 'page-break' },
-      {
-        kind: 'group',
-        blocks: [
-          { kind: 'heading', text: bathPaper.calculations },
-          { kind: 'paragraph', text: bathPaper.blindNote, size: 'small' },
-          calculationsBlock(paper),
-        ],
-      },
-      {
-        kind: 'group',
-        blocks: [
-          { kind: 'heading', text: bathPaper.running },
-          {
-            kind: 'pen',
-            fields: [
-              { label: bathPaper.weighed, unit },
-              { label: bathPaper.started },
-              { label: bathPaper.endAt },
-              { label: bathPaper.ended },
-            ],
-          },
-          { kind: 'heading', text: bathPaper.during },
-          duringBlock(),
-          {
-            kind: 'pen',
-            fields: [
-              { label: bathPaper.rescue, share: 2 },
-              { label: bathPaper.givenBy },
-              { label: bathPaper.checkedBy },
-            ],
-          },
-        ],
-      },
+      { kind: 'group', blocks: calculationBlocks({ sheet, zone: block.zone }) },
+      { kind: 'group', blocks: bathBlocks({ sheet, zone: block.zone }) },
       {
         kind: 'signatures',
         entries: [

@@ -262,6 +262,8 @@ export function presentSheet(request: SheetRequest): BathSheet {
   const calendar = presentCalendar(situation.plan, records, course, now)
   // beside a record that fails its check stands no figure that somebody could dose by
   const hideFigures = hide || situation.block.state !== 'intact'
+  // of a dose that went in, what was calculated is part of what happened
+  const hideCalculated = isOpen ? hideFigures : hide
   const isSound = isTextSound(situation.block.fault)
   const why = obstacles(situation, calculations, { hide: hideFigures })
   return {
@@ -319,8 +321,8 @@ export function presentSheet(request: SheetRequest): BathSheet {
     overrides: presentOverrides(situation),
     steps: presentSteps(situation, calculations, zone),
     secondNeeded: needsSecond(situation),
-    first: presentFirst(first, hide, actor),
-    second: presentSecond(situation, calculations, hide, actor),
+    first: presentFirst(first, hideCalculated, actor),
+    second: presentSecond(situation, calculations, hideCalculated, actor),
     secondShut: secondShut(calculations, actor),
     repeatAt: repeatFrom(calculations, actor)?.toISOString() ?? null,
     mayStart: why.length === 0,
