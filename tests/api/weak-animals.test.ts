@@ -1,3 +1,4 @@
+import pg from 'pg'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { aFormalinHouse } from '../builders/a-bath.ts'
 import type { BathTank, FormalinHouse } from '../builders/a-bath.ts'
@@ -13,12 +14,18 @@ import type { TestApi } from '../support/api.ts'
 
 let api: TestApi
 let house: FormalinHouse
+let owner: pg.Client
 beforeAll(async () => {
   api = await startApi()
   house = await aFormalinHouse(api)
+  owner = new pg.Client({ connectionString: api.ownerUrl })
+  await owner.connect()
 })
 beforeEach(() => api.clock.set(testDay))
-afterAll(() => api.stop())
+afterAll(async () => {
+  await owner.end()
+  await api.stop()
+})
 
 const observe = async (code: string, said: Partial<ObservationBody>) => {
   const body = anObservation(api, code, said)
@@ -182,6 +189,15 @@ describe('how the animals bear a bath', () => {
       })
       .expect(201)
     expect(await stands(number)).toMatchObject({ found: [], step: { state: 'met' } })
+    // nor does the way home and back for the next one
+    const move = (fromEnclosureId: string, toEnclosureId: string, happenedAt: string) =>
+      agent
+        .post(`/api/animals/${home.school.accession}/moves`)
+        .send({ id: api.nextId(), fromEnclosureId, toEnclosureId, happenedAt, reason: 'after their bath' })
+        .expect(201)
+    await move(tub.id, home.tank.id, '2026-12-01T18:11:00Z')
+    await move(home.tank.id, tub.id, '2026-12-01T18:11:30Z')
+    expect(await stands(number)).toMatchObject({ found: [], step: { state: 'met' } })
 
     // part of a group, taken out of it for the bath, was looked at with the group
     const big = await house.tankWithSchool()
@@ -199,6 +215,26 @@ describe('how the animals bear a bath', () => {
       })
       .expect(201)
     expect((await stands(number)).found).toEqual([])
+  })
+
+  it('counts for a day, and not once its row was changed in the database', async () => {
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath, { startsAt: '2026-12-02T19:00:00Z' })
+    const id = await observe(bath.tank.code, {
+      unwell: 0,
+      handled: false,
+      happenedAt: '2026-12-01T18:00:00Z',
+    })
+    expect((await stands(number)).step?.state).toBe('met')
+    const change = (unwell: number) =>
+      owner.query(`UPDATE observations SET unwell_count = $2 WHERE id = $1`, [id, unwell])
+    await owner.query(`ALTER TABLE observations DISABLE TRIGGER USER`)
+    await change(1)
+    expect((await stands(number)).step?.state).toBe('unknown')
+    await change(0)
+    expect((await stands(number)).step?.state).toBe('met')
+    api.clock.set(new Date('2026-12-02T18:00:01Z'))
+    expect((await stands(number)).step?.state).toBe('unknown')
   })
 
   it('is said in the log and in the trail, and an older form says neither', async () => {

@@ -42,7 +42,7 @@ export interface HandlingRow {
 /**
  * Moves, measured weights and joined groups of animals since an instant; an estimated weight needs no hand.
  *
- * @param exceptInto a treatment vessel whose own use is not counted: moves into it are the handling of the bath
+ * @param exceptInto a treatment vessel whose own use is not counted: moves into and out of it are the handling of baths
  */
 export async function readHandling(
   db: Db,
@@ -52,7 +52,7 @@ export async function readHandling(
   const rows: { what: HandlingRow['what']; happened_at: Date; recorded_at: Date }[] = await db.query(
     `SELECT 'moves' AS what, m.happened_at, m.recorded_at FROM live_moves m
       WHERE m.animal_id = ANY ($1::uuid[]) AND NOT m.automatic AND m.happened_at >= $2 AND ${happenedBy('m', '$3')}
-        AND ($4::uuid IS NULL OR m.to_enclosure_id IS DISTINCT FROM $4)
+        AND ($4::uuid IS NULL OR (m.to_enclosure_id IS DISTINCT FROM $4 AND m.from_enclosure_id IS DISTINCT FROM $4))
      UNION ALL
      SELECT 'weights', w.happened_at, w.recorded_at FROM live_weights w
       WHERE w.animal_id = ANY ($1::uuid[]) AND w.basis = 'measured'
