@@ -45,7 +45,7 @@ export const observationWords = defineMessages({
   strengthSaid: (p: { count: number }) => `${p.count} of 2 said`,
   strengthHint: 'A bath asks for both within the day before it begins.',
   unwell: 'Moribund or not eating',
-  handled: 'Netted, moved, examined or sampled in the last 24 h',
+  handled: 'Netted, moved, examined or sampled in the last 24\u00a0h',
   handledNo: 'None',
   handledYes: 'Some or all',
   signs: 'Behaviour and signs',

@@ -103,6 +103,7 @@ const notes = defineMessages({
     beside(
       t.has('words') && `“${t.text('words')}”`,
       t.number('dead') > 0 && `${counted(t.number('dead'), 'animal', 'animals')} found dead`,
+      t.has('unwell') && sayStrength({ unwell: t.number('unwell'), handled: null }).join(),
       byAndWhen(t),
     ),
   'order-held': (t: Told) => beside(t.has('reason') && `“${t.text('reason')}”`, byAndWhen(t)),

@@ -8,9 +8,10 @@ import { anEnclosure } from '../builders/a-water.ts'
 import { anObservation } from '../builders/an-observation.ts'
 import type { ObservationBody } from '../builders/an-observation.ts'
 import type { TodayLogLine } from '../../shared/contracts/today.contract.ts'
-import { sayLogLine } from '../../shared/messages/say-today.ts'
+import { sayLogLine, sayWork } from '../../shared/messages/say-today.ts'
 import { newKey, startApi, testDay } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
+import { worklistOf } from '../support/worklist.ts'
 
 let api: TestApi
 let house: FormalinHouse
@@ -176,6 +177,21 @@ describe('how the animals bear a bath', () => {
     )
     const home = await house.tankWithSchool()
     const number = await house.signedBath({ tank: tub, school: home.school })
+    // the empty vessel says nothing of those who are to come
+    expect((await stands(number)).found).toEqual(unsaid)
+    const weak = await observe(home.tank.code, {
+      unwell: 4,
+      handled: true,
+      happenedAt: '2026-12-01T13:00:00Z',
+    })
+    expect((await stands(number)).found).toEqual(['animals-unwell', 'animals-handled'])
+    await (
+      await api.as('keeper')
+    ).agent
+      .post(`/api/observations/${weak}/void`)
+      .set('Idempotency-Key', newKey())
+      .send({ reason: 'seen at another tank' })
+      .expect(200)
     await observe(home.tank.code, { unwell: 0, handled: false, happenedAt: '2026-12-01T14:00:00Z' })
     const { agent } = await api.as('veterinarian')
     await agent
@@ -254,6 +270,10 @@ describe('how the animals bear a bath', () => {
     const line = (today.log as TodayLogLine[]).find((one) => one.id === id)
     const said = line && sayLogLine(line, testDay.toISOString(), 'UTC').replaceAll('\u00a0', ' ')
     expect(said).toBe('2 animals moribund or not eating. Handled in the last 24 h')
+    await observe(bath.tank.code, { unwell: 4, forVeterinarian: true })
+    const [flagged] = await worklistOf(api).itemsOf('veterinarian', 'observation-flagged', bath.tank.code)
+    const note = flagged && sayWork(flagged, testDay.toISOString(), 'UTC').note.replaceAll('\u00a0', ' ')
+    expect(note).toContain('4 animals moribund or not eating')
     const same = anObservation(api, bath.tank.code, { id, unwell: 3, handled: true })
     expect((await agent.post('/api/observations').send(same)).body.code).toBe('id-already-used')
 

@@ -1,4 +1,5 @@
 import type { AnimalInWater, CautionFacts, OnOff } from '../../../shared/domain/cautions/caution-facts.ts'
+import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
@@ -59,8 +60,10 @@ export function createBathFactsReader(parts: BathFactsParts) {
 
   return {
     /**
-     * @param options.bring animals that will be brought, where the enclosure is a treatment vessel; none at the dose,
-     *                      which is judged by who is there
+     * @param options.named animals that the order names. Where the enclosure is a treatment vessel, those that are not in
+     *                      it yet are judged as its inhabitants to be
+     * @param options.stage at the start of a dose only who is there counts, save that how strong animals are is asked of
+     *                      those that are still to come as well: an empty vessel says nothing of them
      * @param agent what is to be given; null while nothing is chosen, which leaves what is known of an agent unknown
      * @returns null when there is no such enclosure or it has no water
      */
@@ -68,14 +71,20 @@ export function createBathFactsReader(parts: BathFactsParts) {
       enclosureId: string,
       agent: AgentCode | null,
       at: Date,
-      options: { db?: Db; exceptOrderId?: string | null; bring?: readonly string[] } = {},
+      options: {
+        db?: Db
+        exceptOrderId?: string | null
+        named?: readonly string[]
+        stage?: CautionStage
+      } = {},
     ): Promise<BathSituation | null> {
       const db = options.db ?? parts.dataSource
       const water = await parts.water.connectedWaterAt(enclosureId, at, db)
       if (!water) return null
       const enclosureIds = water.enclosures.map((enclosure) => enclosure.id)
       const inside = await parts.animals.animalsIn(enclosureIds, at, db)
-      const animals = [...inside, ...(await broughtTo(water, inside, options.bring ?? [], at, db))]
+      const withThoseToCome = [...inside, ...(await broughtTo(water, inside, options.named ?? [], at, db))]
+      const animals = options.stage === 'start' ? inside : withThoseToCome
       const taxonIds = [...new Set(animals.map((animal) => animal.taxonId))]
       // One after the other: inside a transaction there is one connection
       const history = await readAgentHistory(
@@ -93,7 +102,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
         db,
       )
       const exceptInto = isVessel(water) ? water.enclosureId : null
-      const condition = await readCondition(parts, { animals, exceptInto }, at, db)
+      const condition = await readCondition(parts, { animals: withThoseToCome, exceptInto }, at, db)
       const zone = await parts.zone()
       const newTaxa =
         experienced &&

@@ -188,7 +188,7 @@ export async function readSituation(
   const line = fields.doseLineId === null ? null : await parts.doseLine(fields.doseLineId)
   const situation = await parts.facts.read(fields.enclosureId, product?.agent ?? null, at, {
     ...options,
-    bring: options.stage === 'start' ? [] : fields.animalIds,
+    named: fields.animalIds,
   })
   if (!situation) throw noWaterProblem()
   const lines = product === null ? [] : await parts.doseLinesOf(product.agent)

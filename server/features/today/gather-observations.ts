@@ -45,6 +45,7 @@ export function gatherFlagged(observations: readonly Observation[], moment: Mome
         enclosure: one.enclosure,
         by: one.recordedBy,
         dead: one.foundDead ?? 0,
+        ...(one.unwell === null ? {} : { unwell: one.unwell }),
         ...(one.words === null ? {} : { words: one.words }),
         ...(one.cases[0] === undefined ? {} : { case: one.cases[0] }),
       },
