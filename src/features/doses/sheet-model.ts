@@ -48,6 +48,14 @@ export function isBroken({ state, record }: Pick<BathSheet, 'state' | 'record'>)
   return state === 'broken' || record === 'broken' || record === 'unknown-key'
 }
 
+/** How long the bath is to last, in minutes; of a text that cannot be relied on nobody knows it. */
+export function contactOf(
+  sheet: Pick<BathSheet, 'contactMinutes' | 'targetText'>,
+): number | 'left-in' | 'unknown' {
+  if (sheet.contactMinutes !== null) return sheet.contactMinutes
+  return sheet.targetText === '' ? 'unknown' : 'left-in'
+}
+
 /** The dose that went in and has no end yet; the newest first. */
 export function openRecord(sheet: BathSheet): RecordedDose | null {
   return (

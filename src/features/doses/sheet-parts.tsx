@@ -12,7 +12,7 @@ import { PairOfAmounts } from '../../ui/pair-of-amounts.tsx'
 import { WorkingBlock } from '../../ui/working-block.tsx'
 import { DoseText } from '../orders/index.ts'
 import { OverrideAct } from './override-dialog.tsx'
-import { isBroken, otherCautions } from './sheet-model.ts'
+import { contactOf, isBroken, otherCautions } from './sheet-model.ts'
 
 /** When the bath is stopped at once: on the sheet from the first look to the last. */
 export function StopCriteria({ sheet }: { sheet: BathSheet }) {
@@ -61,17 +61,22 @@ const isToCome = (state: BathSheet['calendar'][number]['state']) =>
 export function WhatGoesIn({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const at = (instant: string) => sayMoment(instant, zone, sheet.now)
   const own = sheet.calendar.find((dose) => dose.key === sheet.key)
+  const contact = contactOf(sheet)
   return (
     <section className="stack">
       <h2 className="t-head">{sheet.drug}</h2>
       <Facts
         of={[
-          [words.product, sheet.productName],
-          [words.target, sheet.targetText],
-          [
-            words.contact,
-            sheet.contactMinutes === null ? words.leftIn : formatDose(sheet.contactMinutes, 'min').text,
-          ],
+          ...(sheet.productName === '' ? [] : [[words.product, sheet.productName] as const]),
+          ...(sheet.targetText === '' ? [] : [[words.target, sheet.targetText] as const]),
+          ...(contact === 'unknown'
+            ? []
+            : [
+                [
+                  words.contact,
+                  contact === 'left-in' ? words.leftIn : formatDose(contact, 'min').text,
+                ] as const,
+              ]),
           ...(own
             ? [
                 [

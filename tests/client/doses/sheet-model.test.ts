@@ -9,6 +9,7 @@ import {
 } from '../../../src/features/doses/second-form-model.ts'
 import {
   amountUnits,
+  contactOf,
   doseToOpen,
   isBroken,
   lotToOpen,
@@ -123,6 +124,14 @@ const sheet = (given: Partial<BathSheet> = {}): BathSheet => ({
   running: [],
   may: ['dose.give', 'dose.calculate-second'],
   ...given,
+})
+
+describe('how long a bath is to last', () => {
+  it('is not said to be for good where the text of the order cannot be relied on', () => {
+    expect(contactOf(sheet())).toBe(45)
+    expect(contactOf(sheet({ contactMinutes: null }))).toBe('left-in')
+    expect(contactOf(sheet({ contactMinutes: null, targetText: '', record: 'broken' }))).toBe('unknown')
+  })
 })
 
 describe('whether somebody is shown amounts', () => {
