@@ -1,5 +1,6 @@
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import type { DocumentBlock, TableCell } from '../../../shared/domain/documents/pdf-document-model.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { bathPaper } from '../../../shared/messages/bath-paper.ts'
@@ -13,7 +14,6 @@ interface Told {
 }
 
 const standing = ({ recorded }: BathSheet) => recorded.filter(({ struck }) => struck === null)
-const wentIn = ({ kind }: RecordedDose) => kind === 'given' || kind === 'recorded'
 const pen = { pen: true } as const
 const unitOf = (sheet: BathSheet) => formatDose('1', (sheet.amountNow?.unit ?? 'g') as UnitCode).symbol
 
@@ -81,7 +81,7 @@ export function calculationBlocks(told: Told): DocumentBlock[] {
 
 function amountOf({ kind, record, amountText }: RecordedDose): string {
   if (record === 'broken') return doseWords.notAsRecorded
-  const amount = wentIn({ kind } as RecordedDose) ? (amountText ?? bathPaper.leftOut) : ''
+  const amount = wentIn({ kind }) ? (amountText ?? bathPaper.leftOut) : ''
   return orderPaper.amountAs({ amount, kind: doseKindNames[kind] })
 }
 

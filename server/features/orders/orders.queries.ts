@@ -1,6 +1,5 @@
 import type { Order, OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
-import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import type { QueryOf } from '../../../shared/contracts/contract.ts'
 import type { listOrders } from '../../../shared/contracts/orders.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
@@ -13,7 +12,6 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { withFault } from '../signing/index.ts'
 import type { SigningService } from '../signing/index.ts'
-import type { SignedOrder } from './order-content.ts'
 import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
 import { readOpenOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
@@ -58,12 +56,6 @@ const sortKeys: Record<string, (row: OrderRow) => string> = {
   startsAt: (row) => row.startsAt ?? '',
   enclosure: (row) => row.enclosureCode,
   signedAt: (row) => row.signedAt ?? '',
-}
-
-export interface SealedVersion {
-  versionNo: number
-  content: SignedOrder | null
-  block: SignatureBlock
 }
 
 export function createOrderQueries(parts: OrderQueriesParts) {

@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import type { ReactNode } from 'react'
 import { signCodes } from '../../../shared/domain/observations/observation.ts'
 import { signWords } from '../../../shared/messages/observations.ts'
 import { observationWords as words } from '../../../shared/messages/observation-screens.ts'
@@ -86,14 +87,9 @@ export function RoundFields({ draft, onChange, animals }: FieldsProps) {
 /** What a bath asks of the animals before it begins: how many are weak, and whether they were disturbed. */
 function StrengthFields({ draft, onChange }: Omit<FieldsProps, 'animals'>) {
   const { unwell, handled } = draft
-  const [open, setOpen] = useState(unwell !== null || handled !== null)
   const said = Number(unwell !== null) + Number(handled !== null)
   return (
-    <details open={open} onToggle={({ currentTarget }) => setOpen(currentTarget.open)}>
-      <summary className="signs-summary">
-        {words.strength}
-        {said > 0 ? `: ${words.strengthSaid({ count: said })}` : ''}
-      </summary>
+    <Folded heading={words.strength} said={said > 0 ? words.strengthSaid({ count: said }) : null}>
       <div className="stack gap-4 pt-3">
         <p className="hint">{words.strengthHint}</p>
         <Stepper
@@ -112,6 +108,20 @@ function StrengthFields({ draft, onChange }: Omit<FieldsProps, 'animals'>) {
           onChange={(next) => onChange({ ...draft, handled: next === 'yes' })}
         />
       </div>
+    </Folded>
+  )
+}
+
+/** Fields that not every look needs, folded away; what was said in them stands beside the heading, and opens them at first. */
+function Folded({ heading, said, children }: { heading: string; said: string | null; children: ReactNode }) {
+  const [open, setOpen] = useState(said !== null)
+  return (
+    <details open={open} onToggle={({ currentTarget }) => setOpen(currentTarget.open)}>
+      <summary className="signs-summary">
+        {heading}
+        {said === null ? '' : `: ${said}`}
+      </summary>
+      {children}
     </details>
   )
 }
@@ -181,15 +191,13 @@ function WhoseFields({ draft, onChange, animals }: FieldsProps) {
 
 /** Signs, words and the mark for the veterinarian: what anybody may say. */
 export function WordsFields({ draft, onChange }: Omit<FieldsProps, 'animals'>) {
-  const [open, setOpen] = useState(draft.signs.length > 0)
   const set = (change: Partial<ObservationDraft>) => onChange({ ...draft, ...change })
   return (
     <>
-      <details open={open} onToggle={({ currentTarget }) => setOpen(currentTarget.open)}>
-        <summary className="signs-summary">
-          {words.signs}
-          {draft.signs.length > 0 ? `: ${words.signsChosen({ count: draft.signs.length })}` : ''}
-        </summary>
+      <Folded
+        heading={words.signs}
+        said={draft.signs.length > 0 ? words.signsChosen({ count: draft.signs.length }) : null}
+      >
         <div className="signs">
           {signCodes.map((sign) => (
             <Tick
@@ -206,7 +214,7 @@ export function WordsFields({ draft, onChange }: Omit<FieldsProps, 'animals'>) {
             />
           ))}
         </div>
-      </details>
+      </Folded>
       <TextareaField
         label={words.wordsLabel}
         value={draft.words}

@@ -1,4 +1,5 @@
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames } from '../../../shared/messages/orders.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
@@ -11,7 +12,6 @@ import type { StepState } from '../../ui/step-mark.tsx'
 type CalendarDose = Order['calendar'][number]
 type CalendarRecord = CalendarDose['records'][number]
 
-const wentIn = ({ kind }: CalendarRecord) => kind === 'given' || kind === 'recorded'
 const isAsItShouldBe = ({ stoppedAt, broke, record }: CalendarRecord) =>
   stoppedAt === null && broke.length === 0 && record === 'intact'
 
