@@ -92,6 +92,126 @@ export const sources = {
     mark: 'C',
   },
 
+  'unesco-44': {
+    citation:
+      'Fofonoff and Millard 1983, Algorithms for computation of fundamental properties of seawater, UNESCO Technical ' +
+      'Papers in Marine Science 44: PSS-78 (Perkin and Lewis 1980), EOS-80 at one atmosphere (Millero and Poisson 1981), ' +
+      'freezing point',
+    mark: 'V',
+  },
+  'hill-1986': {
+    citation:
+      'Hill, Dauphinee and Woods 1986, extension of PSS-78 to low salinities; formula as in two public implementations',
+    mark: 'V2',
+  },
+  'teos-10': {
+    citation:
+      'IOC, SCOR and IAPSO 2010, TEOS-10 manual: reference salinity is 35.16504/35 of the practical one',
+    mark: 'C',
+  },
+  'benson-krause-1984': {
+    citation:
+      'Benson and Krause 1984, Limnology and Oceanography 29, 620–632, as in US Geological Survey memorandum 2011.03 ' +
+      'and APHA Standard Methods 4500-O; coefficients from concordant secondary copies',
+    mark: 'V2',
+  },
+  'benson-krause-vapour': {
+    citation: 'Benson and Krause 1984: vapour pressure of water in the pressure factor, from memory',
+    mark: 'M',
+  },
+  'garcia-gordon-1992': {
+    citation:
+      'Garcia and Gordon 1992, Limnology and Oceanography 37, 1307–1312, eq. 8; coefficients from secondary copies',
+    mark: 'V2',
+  },
+  'standard-atmosphere': {
+    citation: 'ICAO and US Standard Atmosphere 1976, formula of the troposphere',
+    mark: 'C',
+  },
+  'emerson-1975': {
+    citation:
+      'Emerson, Russo, Lund and Thurston 1975, Journal of the Fisheries Research Board of Canada 32, 2379–2383; ' +
+      'coefficients and table from concordant secondary copies',
+    mark: 'V2',
+  },
+  'clegg-whitfield-1995': {
+    citation:
+      'Clegg and Whitfield 1995, Geochimica et Cosmochimica Acta 59, 2403–2421; abstract opened, coefficients from two ' +
+      'unrelated public model codes',
+    mark: 'V2',
+  },
+  'ph-scale-rule': {
+    citation:
+      'Project rule: a pH from NBS buffers is used with the free-scale constant; within 4.2 % of the table of Bower and ' +
+      'Bidwell 1978, an electrode adds about 0.05 pH of its own',
+    mark: 'P',
+  },
+  'srac-410': {
+    citation:
+      'Masser and Jensen 1991, Calculating Treatments for Ponds and Tanks, SRAC Publication 410; tables from memory',
+    mark: 'M',
+  },
+  'piper-1982': {
+    citation: 'Piper et al. 1982, Fish Hatchery Management, US Fish and Wildlife Service, p. 276 and 283',
+    mark: 'V',
+  },
+  mensuration: { citation: 'Mensuration: closed forms, checked by numerical integration', mark: 'C' },
+  'stirred-tank': {
+    citation: 'Mass balance of a well-mixed tank, checked against an ODE solver',
+    mark: 'C',
+  },
+  'salt-balance': { citation: 'Balance of salt and water; density is left out where it is said', mark: 'C' },
+  'salinity-practice': {
+    citation:
+      'Common practice, no source: salinity is lowered by at most 4 to 5 a day and raised by 1 to 3 a day',
+    mark: 'M',
+  },
+  'mcnevin-2003': {
+    citation:
+      'McNevin 2003, MS thesis, Auburn University: copper sulfate at a hundredth of the total alkalinity',
+    mark: 'V',
+  },
+  'copper-alkalinity-limits': {
+    citation:
+      'Extension text: no copper sulfate below 50 mg/L alkalinity; the cap at 250 mg/L is common practice, no source',
+    mark: 'M',
+  },
+  'feed-arithmetic': {
+    citation:
+      'Worked examples of a fish farmers’ association (75 mg/kg) and of a livestock health site (premix); arithmetic recomputed',
+    mark: 'V2',
+  },
+  'cfr-558-261': { citation: '21 CFR 558.261, feed levels of florfenicol, from memory', mark: 'M' },
+  'injection-practice': {
+    citation: 'Common practice, no source: at least 20 graduations, and a rounding error of at most 5 %',
+    mark: 'M',
+  },
+  'le-cren-1951': {
+    citation: 'Le Cren 1951, Journal of Animal Ecology 20, 201–219: relative condition',
+    mark: 'M',
+  },
+  'froese-2006': {
+    citation: 'Froese 2006, Journal of Applied Ichthyology 22, 241–253: exponents of 2.5 to 3.5 are typical',
+    mark: 'M',
+  },
+  'thiosulfate-stoichiometry': {
+    citation:
+      'Computed from atomic weights: thiosulfate and chlorine to tetrathionate, 7.00 mg of the pentahydrate per mg',
+    mark: 'C',
+  },
+  'dechlorination-practice': {
+    citation: 'Common practice, no source: ten times the chlorine for incoming tap water',
+    mark: 'M',
+  },
+  'tricaine-buffer-practice': {
+    citation:
+      'Common practice, no source: two parts of bicarbonate to one of tricaine; less in hard or salt water, by the measured pH',
+    mark: 'M',
+  },
+  'epa-contact-time': {
+    citation: 'US EPA disinfection profiling guidance, baffling factors, from memory',
+    mark: 'M',
+  },
   'quarantine-practice': {
     citation:
       'Public quarantine standard of an accreditation body: at least 30 days under veterinary supervision; further ' +

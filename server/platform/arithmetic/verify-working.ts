@@ -1,5 +1,5 @@
 import type { MathJsInstance, MathNode } from 'mathjs'
-import { expressionUnit } from '../../../shared/domain/working/expression-unit.ts'
+import { workingUnit } from '../../../shared/domain/working/expression-unit.ts'
 import { valueTerm } from '../../../shared/domain/working/value-term.ts'
 import type { WorkingLine } from '../../../shared/domain/working/working-line.ts'
 import { unitTable, type UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -59,13 +59,16 @@ function evaluateLine(
   math: MathJsInstance,
   line: WorkingLine,
 ): number | 'form-not-allowed' | 'not-evaluable' {
-  const unit = expressionUnit(line.unit)
+  const unit = workingUnit(line.unit)
   if (unit === undefined) return 'form-not-allowed'
   try {
     const tree = math.parse(line.expression)
     if (!allowed(math, tree)) return 'form-not-allowed'
     const answer: unknown = tree.evaluate()
     if (unit === '') return typeof answer === 'number' ? answer : 'not-evaluable'
+    // milligrams per kilogram have no dimension left: mathjs makes a plain number of them
+    const one: unknown = math.evaluate(`1 ${unit}`)
+    if (typeof answer === 'number' && typeof one === 'number') return answer / one
     return math.isUnit(answer) ? answer.toNumber(unit) : 'not-evaluable'
   } catch {
     // mathjs throws on what it cannot read and on units that do not fit: both mean that the line is not borne out.
@@ -74,10 +77,10 @@ function evaluateLine(
 }
 
 const allowedOperators = new Set(['add', 'subtract', 'multiply', 'divide', 'pow', 'unaryMinus', 'to'])
-const allowedFunctions = new Set(['sqrt', 'asin', 'tan'])
+const allowedFunctions = new Set(['sqrt', 'asin', 'tan', 'log', 'exp', 'ceil'])
 const allowedSymbols = new Set(['pi', ...allowedFunctions])
 for (const code of Object.keys(unitTable) as UnitCode[])
-  for (const name of (expressionUnit(code) ?? '').split('/')) if (name !== '') allowedSymbols.add(name)
+  for (const name of (workingUnit(code) ?? '').split('/')) if (name !== '') allowedSymbols.add(name)
 
 function allowed(math: MathJsInstance, tree: MathNode): boolean {
   let sound = true
@@ -93,7 +96,7 @@ function allowed(math: MathJsInstance, tree: MathNode): boolean {
 }
 
 function takesValueOf(line: WorkingLine, rest: WorkingLine | undefined): boolean {
-  if (rest === undefined || expressionUnit(rest.unit) === undefined) return false
+  if (rest === undefined || workingUnit(rest.unit) === undefined) return false
   const term = valueTerm(rest.value, rest.unit).replace(/[.*+?^${}()|[\]\\]/g, '\\$&')
   return new RegExp(`(?<![\\w.])${term}(?![\\w/.])`).test(line.expression)
 }

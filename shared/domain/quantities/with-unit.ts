@@ -7,6 +7,7 @@ import { noBreakSpace } from './number-text.ts'
 export function withUnit(kind: QuantityKind, number: string, unit: UnitCode): FormattedQuantity {
   const { symbol: many, symbolOfOne, symbolFirst } = unitOf(unit)
   const symbol = number === '1' && symbolOfOne !== undefined ? symbolOfOne : many
+  if (symbol === '') return { kind, text: number, number, symbol, unit }
   const text = symbolFirst ? `${symbol}${noBreakSpace}${number}` : `${number}${noBreakSpace}${symbol}`
   return { kind, text: text.replaceAll(' ', noBreakSpace), number, symbol, unit }
 }

@@ -34,6 +34,9 @@ export type Dimension =
   | 'potential'
   | 'percentage'
   | 'activity'
+  | 'pureNumber'
+  | 'massFlow'
+  | 'exposure'
 
 export interface Unit<D extends Dimension = Dimension> {
   dimension: D
@@ -128,6 +131,8 @@ export const unitTable = {
   'mg/kg_w_w': row('massFraction', 'mg/kg w/w', [1, 10_000], 0),
   'g/kg_w_w': row('massFraction', 'g/kg w/w', [1, 10], 1),
   'mg/g_w_w': row('massFraction', 'mg/g w/w', [1, 10], 1),
+  /** Of 2,000 lb, as feed levels are printed in the United States: 907.18474 kg. */
+  'g/ton_us': row('massFraction', 'g per US short ton', [10_000, 90_718_474], 0),
 
   // drug per body mass, canonical mg/kg
   'ug/kg': row('bodyDose', 'micrograms/kg', [1, 1000], 0, { symbolOfOne: 'microgram/kg' }),
@@ -178,6 +183,8 @@ export const unitTable = {
   atm: row('pressure', 'atm', [101_325, 1000], 3),
   /** Conventional: 133.322387415 Pa. */
   mmHg: row('pressure', 'mmHg', [133_322_387_415, 1_000_000_000_000], 0),
+  /** Conventional inch of mercury: 3386.388640341 Pa. */
+  inHg: row('pressure', 'inHg', [3_386_388_640_341, 1_000_000_000_000], 2),
   /** Pound-force per square inch: 0.45359237 kg × 9.80665 m/s² ÷ (0.0254 m)², to the last digit of a double. */
   psi: row('pressure', 'psi', [6_894_757_293_168, 1_000_000_000_000], 1),
 
@@ -188,6 +195,16 @@ export const unitTable = {
 
   mV: row('potential', 'mV', [1, 1], 0),
   percent: row('percentage', '%', [1, 1], 1),
+  /** What has no unit by its nature: a ratio of two like quantities, a condition factor. Its name stands before it. */
+  ratio: row('pureNumber', '', [1, 1], 4),
+
+  // mass that passes in a time, canonical g/h
+  'mg/h': row('massFlow', 'mg/h', [1, 1000], 1),
+  'g/h': row('massFlow', 'g/h', [1, 1], 2),
+
+  /** Residual oxidant times the time it acts. */
+  'mg_min/L': row('exposure', 'mg·min/L', [1, 1], 2),
+
   /** Units of activity of a drug; never "U" or "IU". */
   units: row('activity', 'units', [1, 1], 0, { symbolOfOne: 'unit' }),
 } as const satisfies Record<string, Unit>
@@ -223,6 +240,9 @@ export const canonicalUnit = {
   pressure: 'kPa',
   alkalinity: 'meq/L',
   potential: 'mV',
+  pureNumber: 'ratio',
+  massFlow: 'g/h',
+  exposure: 'mg_min/L',
   percentage: 'percent',
   activity: 'units',
 } as const satisfies { [D in Dimension]: UnitOf<D> }

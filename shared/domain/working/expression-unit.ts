@@ -1,4 +1,5 @@
-import type { UnitCode } from '../units/unit-table.ts'
+import { unitOf } from '../units/unit-of.ts'
+import type { Dimension, UnitCode } from '../units/unit-table.ts'
 
 /**
  * How a unit is named inside an expression that mathjs evaluates, where "min" and "d" mean other things and "in" is an
@@ -55,9 +56,45 @@ const names: Partial<Record<UnitCode, string>> = {
   per_d: '',
   percent: '',
   percent_w_w: '',
+  'ug/kg': 'ug/kg',
+  'mg/kg': 'mg/kg',
+  'mg/h': 'mg/hour',
+  'g/h': 'g/hour',
 }
 
-/** The name of a unit in an expression; "" for a plain number; undefined where the unit cannot stand in one. */
+/**
+ * Quantities that empirical formulas take as plain numbers in the canonical unit of their dimension: the equations of
+ * sea water, of dissolved gases and of ammonia are fitted to temperatures in °C, salinities and pH so. Pressures stand
+ * here because the millimetre of mercury has two definitions, 3 in a million apart.
+ */
+const plainDimensions: ReadonlySet<Dimension> = new Set<Dimension>([
+  'temperature',
+  'temperatureDifference',
+  'practicalSalinity',
+  'absoluteSalinity',
+  'ph',
+  'specificGravity',
+  'conductivity',
+  'pressure',
+  'alkalinity',
+  'massFraction',
+  'rate',
+  'pureNumber',
+  'exposure',
+])
+
+/**
+ * The name of a unit in an expression of a working line; "" for a plain number in this very unit; undefined where the
+ * unit cannot stand in one.
+ */
+export function workingUnit(unit: UnitCode): string | undefined {
+  return names[unit] ?? (plainDimensions.has(unitOf(unit).dimension) ? '' : undefined)
+}
+
+/**
+ * The name of a unit in arithmetic that a person types; "" for a plain number; undefined where the unit cannot stand in
+ * arithmetic: nobody means the bare number by "7 dKH".
+ */
 export function expressionUnit(unit: UnitCode): string | undefined {
   return names[unit]
 }

@@ -107,9 +107,12 @@ describe('the second evaluation', () => {
       const ours = convert(7, code, canonical)
       if (!ours.ok) throw new Error(ours.refusal.code)
       const dimensionless = unitOf(code).dimension === 'volumeConcentration'
+      const perBodyMass = unitOf(code).dimension === 'bodyDose'
       const expression = dimensionless
         ? `${valueTerm(7, code)} * 1 L to uL`
-        : `${valueTerm(7, code)} to ${expressionUnit(canonical)}`
+        : perBodyMass
+          ? valueTerm(7, code)
+          : `${valueTerm(7, code)} to ${expressionUnit(canonical)}`
       expect(await verifyWorking([line(expression, ours.value, dimensionless ? 'uL' : canonical)])).toEqual({
         ok: true,
       })
