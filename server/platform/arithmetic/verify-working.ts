@@ -15,6 +15,9 @@ export interface Disagreement {
   why: 'different' | 'form-not-allowed' | 'not-evaluable' | 'key-not-unique' | 'does-not-rest-on-earlier-line'
 }
 
+/** What is checked of a line, whatever it is called. */
+export type CheckedLine = Pick<WorkingLine, 'key' | 'expression' | 'value' | 'unit' | 'rests'>
+
 export type Verification = { ok: true } | { ok: false; disagreements: Disagreement[] }
 
 const relativeTolerance = 1e-9
@@ -29,9 +32,9 @@ const relativeTolerance = 1e-9
  *
  * @param lines one whole working, in order; an empty working agrees with nothing and is refused by the caller
  */
-export async function verifyWorking(lines: readonly WorkingLine[]): Promise<Verification> {
+export async function verifyWorking(lines: readonly CheckedLine[]): Promise<Verification> {
   const math = await loadMath()
-  const earlier = new Map<string, WorkingLine>()
+  const earlier = new Map<string, CheckedLine>()
   const disagreements: Disagreement[] = []
   for (const line of lines) {
     const { key, expression, value: stated } = line
@@ -57,7 +60,7 @@ function agree(stated: number, found: number): boolean {
 
 function evaluateLine(
   math: MathJsInstance,
-  line: WorkingLine,
+  line: CheckedLine,
 ): number | 'form-not-allowed' | 'not-evaluable' {
   const unit = workingUnit(line.unit)
   if (unit === undefined) return 'form-not-allowed'
@@ -95,7 +98,7 @@ function allowed(math: MathJsInstance, tree: MathNode): boolean {
   return sound
 }
 
-function takesValueOf(line: WorkingLine, rest: WorkingLine | undefined): boolean {
+function takesValueOf(line: CheckedLine, rest: CheckedLine | undefined): boolean {
   if (rest === undefined || workingUnit(rest.unit) === undefined) return false
   const term = valueTerm(rest.value, rest.unit).replace(/[.*+?^${}()|[\]\\]/g, '\\$&')
   return new RegExp(`(?<![\\w.])${term}(?![\\w/.])`).test(line.expression)

@@ -1,0 +1,94 @@
+import { ok, refuse, type Refusal, type Result } from '../domain/result.ts'
+import { findUnit } from '../domain/units/find-unit.ts'
+import { parseQuantity, type ParsedQuantity } from '../domain/units/parse-quantity.ts'
+import { quantityOf } from '../domain/units/quantity-of.ts'
+import { unitOf } from '../domain/units/unit-of.ts'
+import type { Dimension } from '../domain/units/unit-table.ts'
+import type { AnyCalculator } from './definition.ts'
+import type { ChoiceInput, QuantityInput, When } from './inputs.ts'
+
+export type Read = Record<string, ParsedQuantity | string | undefined>
+
+const own = (body: unknown, name: string): unknown =>
+  typeof body === 'object' && body !== null && Object.hasOwn(body, name)
+    ? (body as Record<string, unknown>)[name]
+    : undefined
+
+/** Whether an input belongs to the question, by the choices as they stand. */
+export function isAsked(when: When | undefined, body: unknown): boolean {
+  if (when === undefined) return true
+  return Object.entries(when).every(([name, answers]) => {
+    const answer = own(body, name)
+    return typeof answer === 'string' && answers.includes(answer)
+  })
+}
+
+/**
+ * Reads what a person or another program gives a calculator: `{ target: { value: '0.2', unit: 'mg/L' }, basis: 'free' }`.
+ * A value may be a number instead of digits. What belongs to another choice is left aside.
+ *
+ * @param body anything at all
+ * @returns what the calculator's `compute` takes
+ * @refuses every input at fault, not only the first: as parseQuantity · not-whole · not-chosen or the choice's own code ·
+ *          not-an-option · not-asked for a name that the calculator does not know
+ */
+export function readInputs(of: AnyCalculator, body: unknown): { read: Read; refusals: Refusal[] } {
+  const read: Read = {}
+  const refusals: Refusal[] = []
+  if (typeof body === 'object' && body !== null)
+    for (const name of Object.keys(body))
+      if (!Object.hasOwn(of.inputs, name)) refusals.push({ code: 'not-asked', field: name })
+  for (const [name, input] of Object.entries(of.inputs)) {
+    if (!isAsked(input.when, body)) continue
+    const given = own(body, name)
+    const answer = input.kind === 'choice' ? readChoice(input, name, given) : readQuantity(input, name, given)
+    if (!answer.ok) refusals.push(answer.refusal)
+    else if (answer.value !== undefined) read[name] = answer.value
+  }
+  return { read, refusals }
+}
+
+function readChoice(input: ChoiceInput, name: string, given: unknown): Result<string | undefined> {
+  if (given === undefined || given === null || given === '')
+    return input.optional ? ok(undefined) : refuse(input.missing ?? 'not-chosen', name)
+  return typeof given === 'string' && input.options.includes(given)
+    ? ok(given)
+    : refuse('not-an-option', name)
+}
+
+function readQuantity(
+  input: QuantityInput,
+  name: string,
+  given: unknown,
+): Result<ParsedQuantity | undefined> {
+  const value = own(given, 'value')
+  const blank =
+    given === undefined ||
+    given === null ||
+    value === '' ||
+    (typeof value === 'string' && value.trim() === '')
+  if (blank && input.optional) return ok(undefined)
+  const dimensions = [...new Set(input.units.map((unit) => unitOf(unit).dimension))]
+  const unit = own(given, 'unit')
+  const dimension = dimensions.find((each) => isOf(each, unit)) ?? dimensions[0]
+  if (dimension === undefined) return refuse('unknown-unit', name)
+  const { above, min, max } = input.limits ?? {}
+  const rules = { dimension, field: name, above, min, max }
+  const parsed = parseQuantity({ value: digitsOf(value), unit }, definedOf(rules))
+  if (!parsed.ok) return parsed
+  if (input.whole && !Number.isInteger(parsed.value.value)) return refuse('not-whole', name)
+  return parsed
+}
+
+const isOf = (dimension: Dimension, typed: unknown): boolean => {
+  const unit = findUnit(typed, { dimension })
+  return unit.ok && unitOf(unit.value).dimension === dimension
+}
+
+/** JSON has numbers: 25 is taken as "25". */
+const digitsOf = (value: unknown): unknown =>
+  typeof value === 'number' && Number.isFinite(value) ? quantityOf(value, 'ratio').value : value
+
+function definedOf<T extends object>(rules: T): T {
+  return Object.fromEntries(Object.entries(rules).filter(([, value]) => value !== undefined)) as T
+}

@@ -1,0 +1,27 @@
+import type { BenchGroup } from '../bench/groups.ts'
+import { defineMessages } from './define-messages.ts'
+
+/** Words that every calculator of the bench shares. */
+export const benchWords = defineMessages({
+  the: (p: { what: string }) => `the ${p.what}`,
+  notChosen: (p: { what: string }) => `Choose ${p.what}.`,
+  notAnOption: (p: { what: string }) => `Choose ${p.what} from the list.`,
+  notWhole: (p: { what: string }) => `Type ${p.what} as a whole number.`,
+  notAsked: 'This calculator asks for nothing by that name. Leave it out, or check how it is spelled.',
+  resultNotFinite:
+    'The result is too large or too small to mean anything. Check the figures and their units.',
+  notPlausible: (p: { what: string; shown: string; band: string }) =>
+    `${p.what.charAt(0).toUpperCase()}${p.what.slice(1)} is ${p.shown}; ${p.band} is usual. Check the number and its unit.`,
+  rangeNotKnown: 'The stated errors are so large that no range can be given.',
+  decisionSupport:
+    'Decision support for licensed professionals. It replaces no order, label or safety data sheet; local law applies.',
+})
+
+export const benchGroupNames = defineMessages({
+  dose: 'Baths and doses',
+  water: 'Water chemistry',
+  volume: 'Volumes and flow',
+  exchange: 'Changing the water',
+  body: 'Animals and feed',
+  units: 'Units',
+} satisfies Record<BenchGroup, string>)
