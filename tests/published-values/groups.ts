@@ -15,6 +15,7 @@ import tankGeometry from './cases/tank-geometry.json' with { type: 'json' }
 import units from './cases/units.json' with { type: 'json' }
 import { publishedCases, type PublishedCase, type Runner } from './published-case.ts'
 import { doseRunners } from './runners/dose-runners.ts'
+import { gasRunners } from './runners/gas-runners.ts'
 import { seawaterRunners } from './runners/seawater-runners.ts'
 import { unitsRunners } from './runners/units-runners.ts'
 import { waterRunners } from './runners/water-runners.ts'
@@ -43,6 +44,7 @@ const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
   unitsRunners,
   waterRunners,
   doseRunners,
+  gasRunners,
   seawaterRunners,
 ]
 
