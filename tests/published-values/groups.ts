@@ -15,6 +15,8 @@ import tankGeometry from './cases/tank-geometry.json' with { type: 'json' }
 import units from './cases/units.json' with { type: 'json' }
 import { publishedCases, type PublishedCase, type Runner } from './published-case.ts'
 import { doseRunners } from './runners/dose-runners.ts'
+import { gasRunners } from './runners/gas-runners.ts'
+import { seawaterRunners } from './runners/seawater-runners.ts'
 import { unitsRunners } from './runners/units-runners.ts'
 import { waterRunners } from './runners/water-runners.ts'
 
@@ -38,7 +40,13 @@ export const groups: Readonly<Record<string, readonly PublishedCase[]>> = {
 }
 
 /** Who computes which calculator. A new engine adds its map of runners here. */
-const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [unitsRunners, waterRunners, doseRunners]
+const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
+  unitsRunners,
+  waterRunners,
+  doseRunners,
+  gasRunners,
+  seawaterRunners,
+]
 
 export const runners: ReadonlyMap<string, Runner> = new Map(runnerMaps.flatMap((map) => Object.entries(map)))
 

@@ -1,7 +1,8 @@
+import { ok, type Result } from '../../../shared/domain/result.ts'
 import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
-import type { Inputs } from '../published-case.ts'
+import type { Answer, Inputs } from '../published-case.ts'
 
 /** A number of a case; its absence is a fault of the runner, not of the engine. */
 export function numberOf(inputs: Inputs, key: string): number {
@@ -19,4 +20,15 @@ export function quantityIn(inputs: Inputs, key: string, unit: UnitCode): Quantit
 export function firstOf(inputs: Inputs, keys: Readonly<Record<string, UnitCode>>): Quantity | undefined {
   for (const [key, unit] of Object.entries(keys)) if (key in inputs) return quantityIn(inputs, key, unit)
   return undefined
+}
+
+/** One figure of an engine's answer; `names` says what the case calls the arguments that a refusal may point to. */
+export function figure<T>(
+  result: Result<T>,
+  pick: (value: T) => number,
+  names: Readonly<Record<string, string>>,
+): Answer {
+  if (result.ok) return ok({ value: pick(result.value) })
+  const { field } = result.refusal
+  return { ok: false, refusal: { ...result.refusal, field: names[field ?? ''] ?? field ?? '' } }
 }
