@@ -5,6 +5,7 @@ import { createAdministrations } from './features/administrations/index.ts'
 import { createAnimals } from './features/animals/index.ts'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
+import { createBench } from './features/bench/index.ts'
 import { createCounterparties } from './features/counterparties/index.ts'
 import { createDocuments } from './features/documents/index.ts'
 import { createExports } from './features/exports/index.ts'
@@ -168,6 +169,7 @@ export function compose(outside: Outside) {
       ...quarantine.routes,
       ...handover.routes,
       ...today.routes,
+      ...createBench().routes,
     ],
     /** Handlers of background work, by name. */
     jobs: { ...quarantine.jobs },

@@ -74,6 +74,7 @@ export const problemStatus = {
   'already-explained': 409,
   'permit-does-not-cover': 409,
   'fingerprint-not-unique': 409,
+  'not-computable': 422,
   'order-incomplete': 422,
   'dose-line-not-usable': 422,
   'caution-stops': 409,

@@ -4,6 +4,7 @@ import { defineMessages } from './define-messages.ts'
 /** Words that every calculator of the bench shares. */
 export const benchWords = defineMessages({
   the: (p: { what: string }) => `the ${p.what}`,
+  noSuch: 'There is no calculator by that name. GET /api/bench lists them.',
   notChosen: (p: { what: string }) => `Choose ${p.what}.`,
   notAnOption: (p: { what: string }) => `Choose ${p.what} from the list.`,
   notWhole: (p: { what: string }) => `Type ${p.what} as a whole number.`,
@@ -13,6 +14,9 @@ export const benchWords = defineMessages({
   notPlausible: (p: { what: string; shown: string; band: string }) =>
     `${p.what.charAt(0).toUpperCase()}${p.what.slice(1)} is ${p.shown}; ${p.band} is usual. Check the number and its unit.`,
   rangeNotKnown: 'The stated errors are so large that no range can be given.',
+  range: (p: { low: string; high: string }) => `${p.low} to ${p.high}`,
+  disagrees:
+    'The figure came out differently when it was worked out a second way, and is not shown. Tell whoever runs Pratique.',
   decisionSupport:
     'Decision support for licensed professionals. It replaces no order, label or safety data sheet; local law applies.',
 })

@@ -38,6 +38,7 @@ export const problemTitles = defineMessages({
   'file-type-not-allowed': 'Files of this type are not accepted',
   'broken-record': 'This signed record no longer matches its signature',
   'not-as-entered': 'A figure is not the one that was entered',
+  'not-computable': 'No figure can be worked out from this',
   'order-incomplete': 'The order is not complete',
   'dose-line-not-usable': 'This dose line cannot be ordered from',
   'caution-stops': 'A caution stops this',

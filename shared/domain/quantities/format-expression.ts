@@ -1,7 +1,15 @@
 import { unitOf } from '../units/unit-of.ts'
 import { unitTable, type UnitCode } from '../units/unit-table.ts'
 import { expressionUnit } from '../working/expression-unit.ts'
-import { fixedPlaces, groupThousands, minusSign, noBreakSpace, withoutTrailingZeros } from './number-text.ts'
+import { decimalText } from './decimal.ts'
+import {
+  finiteDecimal,
+  fixedPlaces,
+  groupThousands,
+  minusSign,
+  noBreakSpace,
+  withoutTrailingZeros,
+} from './number-text.ts'
 
 const unitByName = new Map<string, UnitCode>()
 for (const code of Object.keys(unitTable) as UnitCode[]) {
@@ -11,10 +19,10 @@ for (const code of Object.keys(unitTable) as UnitCode[]) {
 
 const signs: Record<string, string> = { '*': '×', '/': '÷', '+': '+', '-': minusSign }
 const constants: Record<string, string> = { pi: '3.1416' }
-const functions: Record<string, string> = { asin: 'arcsin' }
+const functions: Record<string, string> = { asin: 'arcsin', log: 'ln' }
 const powers: Record<string, string> = { '^2': '²', '^3': '³' }
 const token =
-  /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d)|(?<sign> [-+*/] )|(?<other>.)/gs
+  /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d(?!\.))|(?<sign> [-+*/] )|(?<other>.)/gs
 const enteredDigits = 6
 const shortenedDigits = 4
 /** A single quantity in brackets, which only the arithmetic needs: "÷ (2,217.6 L)". */
@@ -26,8 +34,10 @@ const needlessBrackets = /\((\d[\d.]*(?:e[+-]?\d+)? [A-Za-z_]\w*(?:\/\w+)?)\)(?!
  * earlier line can have given, are shortened to four, with one decimal place at least, as that line shows them.
  *
  * @param expression the `expression` of a working line
+ * @param earlier    values of the earlier lines as they stand in it; given, they alone are shortened, so that the
+ *                   coefficients of an empirical formula keep every digit
  */
-export function formatExpression(expression: string): string {
+export function formatExpression(expression: string, earlier?: ReadonlySet<string>): string {
   const shown = expression
     .replace(/ to [^ ]+$/, '')
     .replaceAll('pi / 4', '0.7854')
@@ -35,7 +45,8 @@ export function formatExpression(expression: string): string {
   let text = ''
   for (const match of shown.matchAll(token)) {
     const { number, name, power, sign, other } = match.groups ?? {}
-    if (number !== undefined) text += shownNumber(number)
+    if (number !== undefined)
+      text += earlier === undefined || earlier.has(number) ? shownNumber(number) : allDigits(number)
     else if (name !== undefined) text += shownName(name)
     else if (power !== undefined) text += powers[power] ?? power
     else if (sign !== undefined) text += `${noBreakSpace}${signs[sign.trim()]} `
@@ -43,6 +54,10 @@ export function formatExpression(expression: string): string {
     else text += other === '-' ? minusSign : other
   }
   return text
+}
+
+function allDigits(text: string): string {
+  return groupThousands(text.includes('e') ? decimalText(finiteDecimal(text)) : text)
 }
 
 function shownNumber(text: string): string {

@@ -16,7 +16,9 @@ const smallestInTenths = 10
  *
  * @throws RangeError when the line's value is not a finite number
  */
-export function formatWorkingValue(line: Pick<WorkingLine, 'value' | 'unit'> & { code: string }): FormattedQuantity {
+export function formatWorkingValue(
+  line: Pick<WorkingLine, 'value' | 'unit'> & { code: string },
+): FormattedQuantity {
   const water = line.code.startsWith('water-') || waterCodes.has(line.code)
   if (water && unitOf(line.unit).dimension === 'volume') {
     const litres = convert(line.value, line.unit, 'L')

@@ -1,0 +1,38 @@
+import { calculators } from '../../../shared/bench/calculators.ts'
+import { bodySchema } from '../../../shared/bench/schema.ts'
+import { say } from '../../../shared/bench/words.ts'
+import {
+  askUnknownCalculator,
+  calculatorContracts,
+  listCalculators,
+} from '../../../shared/contracts/bench.contract.ts'
+import { benchWords } from '../../../shared/messages/bench.ts'
+import { Problem } from '../../platform/http/problem.ts'
+import { route } from '../../platform/http/route.ts'
+import type { Route } from '../../platform/http/route.ts'
+import { answerOf, presentAnswer, presentSource } from './answer.ts'
+
+/** One address for each calculator. Nothing is kept: a figure that matters is carried into an order, a volume or a reading. */
+export function benchRoutes(): Route[] {
+  return [
+    route(listCalculators, async () => ({
+      calculators: calculators.map((of) => ({
+        id: of.id,
+        address: `/api/bench/${of.id}`,
+        name: say(of, 'name'),
+        purpose: say(of, 'purpose'),
+        group: of.group,
+        weekly: of.weekly ?? false,
+        body: bodySchema(of),
+        example: { ...of.example },
+        sources: of.sources.map(presentSource),
+      })),
+    })),
+    ...calculatorContracts.map(({ of, contract }) =>
+      route(contract, async ({ body }) => presentAnswer(of, await answerOf(of, body))),
+    ),
+    route(askUnknownCalculator, () =>
+      Promise.reject(new Problem('not-found', { detail: benchWords.noSuch })),
+    ),
+  ]
+}

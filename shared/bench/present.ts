@@ -1,0 +1,37 @@
+import { formatDose } from '../domain/quantities/format-dose.ts'
+import { formatExpression } from '../domain/quantities/format-expression.ts'
+import { formatReading } from '../domain/quantities/format-reading.ts'
+import { formatWorkingValue } from '../domain/quantities/format-working-value.ts'
+import type { FormattedQuantity } from '../domain/quantities/formatted-quantity.ts'
+import { quantityOf } from '../domain/units/quantity-of.ts'
+import type { BenchLine } from './definition.ts'
+import type { RoundedFigure } from './round-figure.ts'
+
+/** A figure as it is shown: a dose without trailing zeros, everything else with the digits that it is worth. */
+export function formatFigure(figure: RoundedFigure): FormattedQuantity {
+  return figure.kind === 'dose'
+    ? formatDose(figure.rounded, figure.unit)
+    : formatReading({ value: figure.rounded, unit: figure.unit })
+}
+
+/** The ends of a range, to one digit more than the result has. */
+export function formatRange(
+  range: { low: number; high: number },
+  figure: RoundedFigure,
+): { low: FormattedQuantity; high: FormattedQuantity } {
+  const digits = Math.min(figure.significantFigures + 1, 12)
+  const at = (value: number) =>
+    formatDose(quantityOf(Number(value.toPrecision(digits)), figure.unit).value, figure.unit)
+  return { low: at(range.low), high: at(range.high) }
+}
+
+/** A line of working as people read it: the arithmetic with its numbers put in, and what it gives. */
+export function formatLine(
+  line: BenchLine,
+  lines: readonly BenchLine[],
+): { formula: string; result: FormattedQuantity } {
+  const earlier = new Set(
+    lines.filter((each) => line.rests.includes(each.key)).map((each) => String(Math.abs(each.value))),
+  )
+  return { formula: formatExpression(line.expression, earlier), result: formatWorkingValue(line) }
+}
