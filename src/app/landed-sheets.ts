@@ -12,4 +12,5 @@ export const landed: ReadonlySet<SheetName> = new Set<SheetName>([
   'orders',
   'pharmacy',
   'register',
+  'bench',
 ])

@@ -64,6 +64,8 @@ const sheetRoutes: RouteObject[] = [
   { path: 'register/permits/:number', lazy: () => import('./routes/register/permit.tsx') },
   { path: 'register/exports', lazy: () => import('./routes/register/exports.tsx') },
   { path: 'register/parties', lazy: () => import('./routes/register/parties.tsx') },
+  { path: 'bench', lazy: () => import('./routes/bench/bench.tsx') },
+  { path: 'bench/:calculator', lazy: () => import('./routes/bench/calculator.tsx') },
   { path: 'check', lazy: () => import('./routes/check.tsx') },
   { path: 'check/:fingerprint', lazy: () => import('./routes/check.tsx') },
 ]

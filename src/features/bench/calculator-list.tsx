@@ -1,0 +1,60 @@
+import { Link } from 'react-router-dom'
+import { calculators } from '../../../shared/bench/calculators.ts'
+import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import { benchGroups } from '../../../shared/bench/groups.ts'
+import { say } from '../../../shared/bench/words.ts'
+import { benchGroupNames } from '../../../shared/messages/bench.ts'
+import { benchSheetWords as words } from '../../../shared/messages/bench-sheet.ts'
+import { paths } from '../../lib/paths.ts'
+
+/** Calculators whose name or purpose has every one of the words. */
+export function matchingCalculators(q: string): AnyCalculator[] {
+  const wanted = q.toLowerCase().split(/\s+/).filter(Boolean)
+  return calculators.filter((of) => {
+    const text = `${say(of, 'name')} ${say(of, 'purpose')}`.toLowerCase()
+    return wanted.every((word) => text.includes(word))
+  })
+}
+
+/** The calculators: the dozen that are used every week first, the rest behind "more", by what they are about. */
+export function CalculatorList({ q }: { q: string }) {
+  const found = matchingCalculators(q)
+  const weekly = found.filter((of) => of.weekly)
+  const more = found.filter((of) => !of.weekly)
+  if (found.length === 0) return <p role="status">{words.noneFound}</p>
+  const groups = benchGroups.filter((group) => more.some((of) => of.group === group))
+  return (
+    <>
+      {weekly.length > 0 ? (
+        <section className="stack">
+          <h2 className="t-head">{words.weekly}</h2>
+          <Tools of={weekly} />
+        </section>
+      ) : null}
+      {more.length > 0 ? (
+        <details open={q !== '' || weekly.length === 0} className="bench-more">
+          <summary>{words.more({ count: more.length })}</summary>
+          {groups.map((group) => (
+            <section key={group} className="stack mt-4">
+              <h2 className="t-head">{benchGroupNames[group]}</h2>
+              <Tools of={more.filter((of) => of.group === group)} />
+            </section>
+          ))}
+        </details>
+      ) : null}
+    </>
+  )
+}
+
+function Tools({ of: tools }: { of: readonly AnyCalculator[] }) {
+  return (
+    <ul className="bench-tools">
+      {tools.map((of) => (
+        <li key={of.id}>
+          <Link to={paths.calculator(of.id)}>{say(of, 'name')}</Link>
+          <span className="t-2">{say(of, 'purpose')}</span>
+        </li>
+      ))}
+    </ul>
+  )
+}

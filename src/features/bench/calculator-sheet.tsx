@@ -1,0 +1,83 @@
+import { useMemo, useState } from 'react'
+import { Link } from 'react-router-dom'
+import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import { evaluate } from '../../../shared/bench/evaluate.ts'
+import { say, sayRefusal } from '../../../shared/bench/words.ts'
+import { benchSheetWords as words } from '../../../shared/messages/bench-sheet.ts'
+import { paths } from '../../lib/paths.ts'
+import { Button } from '../../ui/button.tsx'
+import { Cartouche } from '../../ui/cartouche.tsx'
+import { Area, Sheet } from '../../ui/sheet.tsx'
+import { bodyOf, emptyDraft, exampleDraft, isUntouched } from './bench-draft.ts'
+import { InputFields } from './input-fields.tsx'
+import { rememberedUnits } from './remembered-units.ts'
+import { ResultFigures, ResultGrounds } from './result.tsx'
+
+/** One calculator: its fields, and the figure as one types, by the same code that the server answers with. */
+export function CalculatorSheet({ of }: { of: AnyCalculator }) {
+  const [draft, setDraft] = useState(() => emptyDraft(of, rememberedUnits()))
+  const evaluation = useMemo(() => evaluate(of, bodyOf(of, draft)), [of, draft])
+  const untouched = isUntouched(draft)
+  const filled = (name: string) => {
+    const given = draft[name]
+    return typeof given === 'object' ? given.value.trim() !== '' : given !== undefined && given !== ''
+  }
+  const refusals = evaluation.ok ? [] : evaluation.refusals
+  const wrong = (name: string) => {
+    const refusal = refusals.find((one) => one.field === name)
+    return refusal && filled(name) ? sayRefusal(of, refusal) : undefined
+  }
+  // a field that is empty is no fault of the person's yet, so it is asked for where the figure will stand
+  const asked = refusals.filter((one) => one.field === undefined || !filled(one.field))
+  return (
+    <Sheet recipe="order" className="bench-sheet">
+      <Area>
+        <Cartouche
+          place={<Link to={paths.bench()}>{words.title}</Link>}
+          title={say(of, 'name')}
+          source={say(of, 'purpose')}
+        />
+        <div className="pane stack">
+          <p className="t-2">{words.decisionSupport}</p>
+          <div className="row row-wrap">
+            <Button size="small" onClick={() => setDraft(exampleDraft(of))}>
+              {words.example}
+            </Button>
+            <Button size="small" kind="plain" onClick={() => setDraft(emptyDraft(of, rememberedUnits()))}>
+              {words.clear}
+            </Button>
+          </div>
+        </div>
+      </Area>
+      <Area className="pane stack">
+        <InputFields of={of} draft={draft} onChange={setDraft} wrong={wrong} />
+      </Area>
+      <Area className="bench-result">
+        <section className="net-volume" aria-live="polite" aria-label={words.result}>
+          <h2 className="t-label">{words.result}</h2>
+          {evaluation.ok ? (
+            <ResultFigures of={of} answer={evaluation.answer} />
+          ) : (
+            <>
+              <p className="sea-name">{words.notYet}</p>
+              {untouched ? (
+                <p>{words.startHere}</p>
+              ) : (
+                <ul className="bench-asked">
+                  {asked.map((one) => (
+                    <li key={`${one.field ?? ''} ${one.code}`}>{sayRefusal(of, one)}</li>
+                  ))}
+                </ul>
+              )}
+            </>
+          )}
+        </section>
+        {evaluation.ok ? (
+          <div className="pane stack">
+            <ResultGrounds of={of} answer={evaluation.answer} />
+          </div>
+        ) : null}
+      </Area>
+    </Sheet>
+  )
+}

@@ -1,0 +1,2 @@
+export { CalculatorList } from './calculator-list.tsx'
+export { CalculatorSheet } from './calculator-sheet.tsx'

@@ -1,0 +1,104 @@
+import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import type { ChoiceInput, QuantityInput } from '../../../shared/bench/inputs.ts'
+import { say, sayOption, wordOf } from '../../../shared/bench/words.ts'
+import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
+import { unitOf } from '../../../shared/domain/units/unit-of.ts'
+import { unitsOf } from '../../../shared/domain/units/units-of.ts'
+import { ChoiceField } from '../../ui/choice-field.tsx'
+import { QuantityField } from '../../ui/quantity-field.tsx'
+import { SelectField } from '../../ui/select-field.tsx'
+import { askedInputs, fittingUnits, unitKey } from './bench-draft.ts'
+import type { Draft } from './bench-draft.ts'
+import { rememberUnit } from './remembered-units.ts'
+
+const fewOptions = 2
+const shortWords = 40
+
+/** The fields of a calculator, made from its description: those that belong to the question as the choices stand. */
+export function InputFields({
+  of,
+  draft,
+  onChange,
+  wrong,
+}: {
+  of: AnyCalculator
+  draft: Draft
+  onChange: (next: Draft) => void
+  wrong: (name: string) => string | undefined
+}) {
+  return askedInputs(of, draft).map((name) => {
+    const input = of.inputs[name]
+    const given = draft[name]
+    if (!input) return null
+    const common = {
+      label: say(of, `input.${name}`),
+      hint: wordOf(of, `help.${name}`),
+      wrong: wrong(name),
+      optional: input.optional ?? false,
+    }
+    if (input.kind === 'choice')
+      return (
+        <OneChoice
+          key={name}
+          {...{ of, name, input, common, draft }}
+          value={typeof given === 'string' ? given : ''}
+          onChange={(next) => onChange({ ...draft, [name]: next })}
+        />
+      )
+    return (
+      <QuantityField
+        key={name}
+        {...common}
+        name={name}
+        allowNegative={mayBeNegative(input)}
+        units={input.units.map((unit) => ({ unit, label: unitOf(unit).symbol }))}
+        quantity={typeof given === 'object' ? given : { value: '', unit: input.units[0] ?? '' }}
+        onChange={(next) => {
+          rememberUnit(unitKey(of, name), next.unit)
+          onChange({ ...draft, [name]: next })
+        }}
+      />
+    )
+  })
+}
+
+const mayBeNegative = ({ limits }: QuantityInput) =>
+  limits?.above === undefined && (limits?.min === undefined || limits.min < 0)
+
+function OneChoice({
+  of,
+  name,
+  input,
+  common,
+  draft,
+  value,
+  onChange,
+}: {
+  of: AnyCalculator
+  name: string
+  input: ChoiceInput
+  common: { label: string; hint?: string | undefined; wrong?: string | undefined; optional: boolean }
+  draft: Draft
+  value: string
+  onChange: (next: string) => void
+}) {
+  const source = input.unitsOf === undefined ? undefined : draft[input.unitsOf]
+  const options =
+    typeof source === 'object' && isUnitCode(source.unit)
+      ? fittingUnits(input.options, unitsOf(unitOf(source.unit).dimension))
+      : input.options
+  const segments = options.map((option) => ({ value: option, label: sayOption(of, name, option) }))
+  const length = segments.reduce((sum, segment) => sum + segment.label.length, 0)
+  if (segments.length <= fewOptions && length <= shortWords)
+    return (
+      <ChoiceField {...common} segments={segments} value={value === '' ? null : value} onChange={onChange} />
+    )
+  return (
+    <SelectField
+      {...common}
+      options={segments}
+      value={options.includes(value) ? value : ''}
+      onChange={(event) => onChange(event.target.value)}
+    />
+  )
+}

@@ -1,0 +1,108 @@
+import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
+import { formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
+import { formatReading } from '../../../shared/domain/quantities/format-reading.ts'
+import { sources } from '../../../shared/domain/sources.ts'
+import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
+import { benchSheetWords as words, sourceMarks } from '../../../shared/messages/bench-sheet.ts'
+import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
+import { Quantity } from '../../ui/quantity.tsx'
+import { WorkingBlock } from '../../ui/working-block.tsx'
+
+/** The result with its range, and the figures that were worked out with it. */
+export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
+  const [result, ...others] = answer.figures
+  const ends = answer.range && formatRange(answer.range, result)
+  return (
+    <>
+      <p className="t-label">{say(of, `result.${result.key}`)}</p>
+      <p>
+        <Quantity of={formatFigure(result)} size="dose" />
+      </p>
+      {ends ? (
+        <p data-quantity="dose">{words.between({ low: ends.low.text, high: ends.high.text })}</p>
+      ) : null}
+      {others.length > 0 ? (
+        <dl className="bench-figures">
+          {others.map((figure) => (
+            <div key={figure.key}>
+              <dt>{say(of, `result.${figure.key}`)}</dt>
+              <dd>
+                <Quantity of={formatFigure(figure)} size="strong" />
+              </dd>
+            </div>
+          ))}
+        </dl>
+      ) : null}
+    </>
+  )
+}
+
+/** Everything behind the result: cautions, the steps of a plan, the working, the sources. */
+export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
+  const { working, schedule } = answer
+  const rows = working.map((line, at) => {
+    const { formula, result } = formatLine(line, working)
+    const last = at === working.length - 1
+    return {
+      key: line.key,
+      what: sayLine(of, line),
+      formula,
+      result: <Quantity of={result} />,
+      kind: last ? ('sum' as const) : ('line' as const),
+    }
+  })
+  return (
+    <>
+      {sortCautions(answer.cautions.map((one) => ({ ...one, text: sayCaution(of, one) }))).map((caution) => (
+        <CautionBlock key={caution.code + caution.text} level={caution.level}>
+          {caution.text}
+        </CautionBlock>
+      ))}
+      {schedule ? (
+        <table className="bench-schedule">
+          <thead>
+            <tr>
+              {schedule.columns.map((column) => (
+                <th key={column.key} scope="col">
+                  {say(of, `column.${column.key}`)}
+                </th>
+              ))}
+            </tr>
+          </thead>
+          <tbody>
+            {schedule.rows.map((row, at) => (
+              <tr key={at}>
+                {schedule.columns.map((column, i) => (
+                  <td key={column.key} className="num">
+                    {
+                      formatReading(
+                        quantityOf(Number((row[i] ?? 0).toPrecision(column.figures ?? 4)), column.unit),
+                      ).text
+                    }
+                  </td>
+                ))}
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      ) : null}
+      <section>
+        <h2 className="t-head">{words.working}</h2>
+        <WorkingBlock label={words.working} rows={rows} />
+        <p className="t-note">{say(of, 'formula')}</p>
+      </section>
+      <details className="bench-sources">
+        <summary>{words.sources({ count: answer.sources.length })}</summary>
+        <ul>
+          {answer.sources.map((key) => (
+            <li key={key}>
+              {sources[key].citation} <span className="t-2">{sourceMarks[sources[key].mark]}</span>
+            </li>
+          ))}
+        </ul>
+      </details>
+    </>
+  )
+}
