@@ -1,8 +1,18 @@
 import { bathDose } from './calculators/bath-dose.ts'
+import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { tankVolume } from './calculators/tank-volume.ts'
+import { turnover } from './calculators/turnover.ts'
+import { unitConversion } from './calculators/unit-conversion.ts'
 import type { AnyCalculator } from './definition.ts'
 
 /** Every calculator of the bench, in the order in which the bench shows them. A new one is a file and a line here. */
-export const calculators: readonly AnyCalculator[] = [bathDose]
+export const calculators: readonly AnyCalculator[] = [
+  bathDose,
+  copperSulfate,
+  tankVolume,
+  turnover,
+  unitConversion,
+]
 
 const byId = new Map(calculators.map((each) => [each.id, each]))
 

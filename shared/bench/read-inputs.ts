@@ -70,7 +70,11 @@ function readQuantity(
   if (blank && input.optional) return ok(undefined)
   const dimensions = [...new Set(input.units.map((unit) => unitOf(unit).dimension))]
   const unit = own(given, 'unit')
-  const dimension = dimensions.find((each) => isOf(each, unit)) ?? dimensions[0]
+  // "mg/kg" is a code of its own and also how people write milligrams per kilogram of feed: the code goes first
+  const exact = input.units.find((each) => each === unit)
+  const dimension = exact
+    ? unitOf(exact).dimension
+    : (dimensions.find((each) => isOf(each, unit)) ?? dimensions[0])
   if (dimension === undefined) return refuse('unknown-unit', name)
   const { above, min, max } = input.limits ?? {}
   const rules = { dimension, field: name, above, min, max }

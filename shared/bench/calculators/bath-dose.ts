@@ -1,10 +1,10 @@
 import type { BathProduct, Measure } from '../../domain/dose/bath-product.ts'
 import { computeBathDose } from '../../domain/dose/compute-bath-dose.ts'
 import { ok } from '../../domain/result.ts'
-import { convert } from '../../domain/units/convert.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
-import { defineCalculator, type Figure } from '../definition.ts'
+import { defineCalculator } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
+import { measuredFigure } from './parts/measured-figure.ts'
 import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
 
 const ofSubstance = ['active', 'salt', 'base', 'free', 'total'] as const
@@ -146,21 +146,3 @@ export const bathDose = defineCalculator({
     })
   },
 })
-
-/** The amount in the unit of the balance or measure with the digits it shows, or unrounded without one. */
-export function measuredFigure(
-  key: string,
-  value: number,
-  unit: 'g' | 'mL',
-  measured: { value: string; unit: Figure['unit'] } | undefined,
-): Figure {
-  if (measured === undefined) return { key, value, unit, kind: 'dose' }
-  const there = convert(value, unit, measured.unit)
-  return {
-    key,
-    value: there.ok ? there.value : value,
-    unit: measured.unit,
-    measured: measured.value,
-    kind: 'dose',
-  }
-}

@@ -38,7 +38,7 @@ export function bodyOf(of: AnyCalculator, draft: Draft): Record<string, unknown>
     Object.entries(draft).flatMap(([name, given]): [string, unknown][] => {
       if (!isAsked(of.inputs[name]?.when, draft)) return []
       if (typeof given === 'string') return given === '' ? [] : [[name, given]]
-      const typed = /^\s*([-−–+]?[\d.,]+)\s*([^\d\s*/×÷+()−-].*)$/s.exec(given.value)
+      const typed = /^\s*([-−–+]?[\d.,]+)\s*([a-zµμ°%‰].*)$/is.exec(given.value)
       return [[name, typed ? { value: typed[1], unit: typed[2] } : given]]
     }),
   )

@@ -24,11 +24,10 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   }
   const refusals = evaluation.ok ? [] : evaluation.refusals
   const wrong = (name: string) => {
+    // an empty field is no fault of the person's yet: it is asked for where the figure will stand
     const refusal = refusals.find((one) => one.field === name)
     return refusal && filled(name) ? sayRefusal(of, refusal) : undefined
   }
-  // a field that is empty is no fault of the person's yet, so it is asked for where the figure will stand
-  const asked = refusals.filter((one) => one.field === undefined || !filled(one.field))
   return (
     <Sheet recipe="order" className="bench-sheet">
       <Area>
@@ -64,7 +63,7 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
                 <p>{words.startHere}</p>
               ) : (
                 <ul className="bench-asked">
-                  {asked.map((one) => (
+                  {refusals.map((one) => (
                     <li key={`${one.field ?? ''} ${one.code}`}>{sayRefusal(of, one)}</li>
                   ))}
                 </ul>

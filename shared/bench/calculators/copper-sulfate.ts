@@ -1,0 +1,104 @@
+import { copperInPentahydrate } from '../../domain/dose/copper.ts'
+import { computeBathDose } from '../../domain/dose/compute-bath-dose.ts'
+import { ok, refuse } from '../../domain/result.ts'
+import { defineMessages } from '../../messages/define-messages.ts'
+import { defineCalculator } from '../definition.ts'
+import { choice, quantity } from '../inputs.ts'
+import { measuredFigure } from './parts/measured-figure.ts'
+import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
+
+/** Grams of copper sulfate for a target of free copper, or for what a test says is missing. */
+export const copperSulfate = defineCalculator({
+  id: 'copper-sulfate',
+  group: 'dose',
+  weekly: true,
+  words: defineMessages({
+    name: 'Copper sulfate',
+    purpose: 'How much copper sulfate pentahydrate brings the free copper of a water to its target.',
+    formula: 'mass = (target − measured) × net volume ÷ 0.2545',
+    'input.product': 'Copper product',
+    'option.product.pentahydrate': 'Copper sulfate pentahydrate',
+    'option.product.chelated': 'A chelated or amine-complexed product',
+    'input.targetOf': 'What the target is of',
+    'option.targetOf.copper': 'Free copper (Cu²⁺)',
+    'option.targetOf.compound': 'Copper sulfate pentahydrate',
+    'input.target': 'Target in the water',
+    'help.target': 'As the order says. Marine systems are usually kept at 0.15 to 0.2 mg/L of free copper.',
+    'input.measured': 'Free copper by a test',
+    'input.volume': 'Net volume of the water',
+    'input.volumeError': 'Error of the volume',
+    'input.purity': 'Purity of the salt',
+    'input.division': 'Smallest step of the balance',
+    'result.amount': 'Copper sulfate to add',
+    'refusal.ionic-target-chelated-product':
+      'A target of free copper must not be used for a chelated product. Dose it by its label, in total copper, and test it the way its maker says.',
+    'refusal.copper-basis-not-stated':
+      'Choose what the target is of. Copper and copper sulfate differ by 3.93 times.',
+    'caution.invertebrates':
+      'Copper kills invertebrates, and sharks, rays and some bony fish at the level of treatment. Rock and sand take it up and give it back later.',
+    'caution.steps':
+      'Raise it in steps over days, test at least daily, and write every reading down before adding.',
+    'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
+  }),
+  inputs: {
+    product: choice(['pentahydrate', 'chelated']),
+    targetOf: choice(['copper', 'compound'], { missing: 'copper-basis-not-stated' }),
+    target: quantity({
+      units: ['mg/L', 'ug/L', 'g/m3'],
+      limits: { above: 0, max: 1000, plausible: { max: 3 } },
+    }),
+    measured: quantity({
+      units: ['mg/L', 'ug/L'],
+      limits: { min: 0 },
+      optional: true,
+      when: { targetOf: ['copper'] },
+      reading: 'copper-free',
+    }),
+    volume: quantity({ units: volumeUnits, limits: { above: 0 }, netVolume: true }),
+    volumeError: quantity({
+      units: ['percent'],
+      limits: { min: 0, max: 90 },
+      optional: true,
+      errorOf: 'volume',
+    }),
+    purity: quantity({ units: ['percent_w_w'], limits: { above: 0, max: 100 }, optional: true }),
+    division: quantity({ units: ['g', 'mg', 'kg'], limits: { above: 0 }, optional: true }),
+  },
+  fields: { reading: 'measured', strength: 'purity', netVolume: 'volume', basis: 'targetOf' },
+  example: {
+    product: 'pentahydrate',
+    targetOf: 'copper',
+    target: { value: '0.2', unit: 'mg/L' },
+    volume: { value: '11400', unit: 'L' },
+    division: { value: '0.1', unit: 'g' },
+  },
+  sources: ['ufifas-fa165', 'iupac-weights'],
+  cautions: [
+    { code: 'invertebrates', level: 'warning' },
+    { code: 'steps', level: 'note' },
+    { code: 'volume', level: 'note' },
+  ],
+  carries: [{ to: 'order' }],
+  published: ['copper_sulfate_g'],
+  compute({ product, targetOf, target, measured, volume, purity, division }) {
+    if (product === 'chelated') return refuse('ionic-target-chelated-product', 'product')
+    const dose = computeBathDose({
+      target: { concentration: target.entered, basis: targetOf === 'copper' ? 'free' : 'salt' },
+      netLitres: volume.value,
+      product: {
+        form: 'solid',
+        strength: purity?.entered ?? { value: '100', unit: 'percent_w_w' },
+        strengthBasis: 'salt',
+        share: copperInPentahydrate,
+      },
+      ...(measured ? { present: measured.entered } : {}),
+      ...(division ? { measure: { division: division.entered } } : {}),
+    })
+    if (!dose.ok) return dose
+    const { amount, unit, measured: weighed, working } = dose.value
+    return ok({
+      figures: [measuredFigure('amount', amount, unit, weighed)],
+      working: withVolumeAsEntered(working, volume),
+    })
+  },
+})

@@ -1,0 +1,85 @@
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { launchChromium } from '../support/chromium.ts'
+import { deskSize, expectSound, openSignedIn, phoneSize, picture } from '../support/journey.ts'
+import { startServedApp } from '../support/served-app.ts'
+import type { ServedApp } from '../support/served-app.ts'
+
+let browser: Browser
+let app: ServedApp
+
+beforeAll(async () => {
+  app = await startServedApp()
+  await app.as('technician')
+  browser = await launchChromium()
+}, 180_000)
+afterAll(async () => {
+  await browser.close()
+  await app.stop()
+})
+
+const signedIn = (size: typeof deskSize, at: string): Promise<Page> =>
+  openSignedIn(browser, app, 'technician', at, size)
+
+const field = (page: Page, name: string) => page.getByRole('textbox', { name: new RegExp(`^${name}`) })
+const result = (page: Page) => page.getByRole('region', { name: 'Result' })
+const choose = (page: Page, name: string, label: string) =>
+  page.getByLabel(name, { exact: true }).selectOption({ label })
+const unit = async (page: Page, name: string, label: string) => {
+  await page.getByLabel(new RegExp(`^Unit.*${name}`, 'i')).selectOption({ label })
+}
+
+describe.each([deskSize, phoneSize])('the bench at $width px', (size) => {
+  it('gives the grams of copper sulfate and the millilitres of formalin, with working and sources', async () => {
+    const page = await signedIn(size, '/bench')
+    await page.getByRole('heading', { name: 'Bench' }).waitFor()
+    await expectSound(page, 'the bench')
+    await picture(page, 'bench')
+    await page.getByRole('link', { name: 'Copper sulfate', exact: true }).click()
+    await choose(page, 'Copper product', 'Copper sulfate pentahydrate')
+    await field(page, 'Target in the water').fill('0.2')
+    await field(page, 'Net volume of the water').fill('11400')
+    await result(page).getByText('Copper and copper sulfate differ by 3.93 times', { exact: false }).waitFor()
+    await choose(page, 'What the target is of', 'Free copper (Cu²⁺)')
+    // 2,280 mg of copper ÷ 0.2545, computed from IUPAC weights
+    await result(page)
+      .getByText(/^8\.959/)
+      .waitFor()
+    expect(await page.getByRole('table', { name: 'Working' }).innerText()).toContain('2,280')
+    await page.getByText(/^Sources/).click()
+    await page.getByText(/FA165/).waitFor()
+    await expectSound(page, 'copper sulfate')
+    await picture(page, 'copper-sulfate')
+
+    await page.goto(`${app.url}/bench/bath-dose`)
+    await field(page, 'Target in the water').fill('25 ppm')
+    await choose(page, 'What the target is of', 'The product as it stands on the shelf')
+    await field(page, 'Net volume of the water').fill('3785')
+    await page.getByRole('radio', { name: 'Liquid' }).click()
+    await result(page).getByText('Parts per million can mean three things', { exact: false }).waitFor()
+    await field(page, 'Target in the water').fill('25')
+    await unit(page, 'Target in the water', 'µL/L')
+    await page.getByRole('button', { name: '25 µL/L' }).first().click()
+    await result(page)
+      .getByText(/^94\.63/)
+      .waitFor()
+    await page.context().close()
+  })
+
+  it('remembers a unit, empties its fields, and says when there is no such calculator', async () => {
+    const page = await signedIn(size, '/bench/turnover')
+    await unit(page, 'Volume of the water', 'US gal')
+    await page.getByRole('button', { name: 'Fill in an example' }).click()
+    await result(page)
+      .getByText(/^62\.5/)
+      .waitFor()
+    await page.getByRole('button', { name: 'Empty the fields' }).click()
+    await result(page).getByText('No figure yet').waitFor()
+    await page.reload()
+    const kept = page.getByLabel(/^Unit.*Volume of the water/i)
+    expect(await kept.inputValue()).toBe('gal_us')
+    await page.goto(`${app.url}/bench/no-such-thing`)
+    await page.getByText('There is no calculator at this address.').waitFor()
+    await page.context().close()
+  })
+})
