@@ -65,7 +65,7 @@ export const everySheet = [
   { name: 'permit', as: 'registrar', address: '/register/permits/:number', list: '/api/register/permits' },
   { name: 'exports', as: 'registrar', address: '/register/exports' },
   { name: 'bench', as: 'tech', address: '/bench' },
-  { name: 'calculator', as: 'tech', address: '/bench/bath-dose' },
+  { name: 'calculator', as: 'tech', address: '/bench/:calculator', fill: 'bath-dose' },
   { name: 'parties', as: 'registrar', address: '/register/parties' },
   { name: 'check', as: 'registrar', address: '/check' },
   { name: 'check-print', as: 'vet', address: '/check/:fingerprint', fill: '0123456789ABCDEF' },
