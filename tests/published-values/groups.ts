@@ -17,6 +17,7 @@ import { publishedCases, type PublishedCase, type Runner } from './published-cas
 import { doseRunners } from './runners/dose-runners.ts'
 import { gasRunners } from './runners/gas-runners.ts'
 import { seawaterRunners } from './runners/seawater-runners.ts'
+import { flowRunners } from './runners/flow-runners.ts'
 import { unitsRunners } from './runners/units-runners.ts'
 import { waterRunners } from './runners/water-runners.ts'
 
@@ -41,6 +42,7 @@ export const groups: Readonly<Record<string, readonly PublishedCase[]>> = {
 
 /** Who computes which calculator. A new engine adds its map of runners here. */
 const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
+  flowRunners,
   unitsRunners,
   waterRunners,
   doseRunners,
