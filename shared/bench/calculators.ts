@@ -1,15 +1,21 @@
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { injection } from './calculators/injection.ts'
+import { salinityChange } from './calculators/salinity-change.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
+import { washOut } from './calculators/wash-out.ts'
 import type { AnyCalculator } from './definition.ts'
 
 /** Every calculator of the bench, in the order in which the bench shows them. A new one is a file and a line here. */
 export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
+  injection,
   tankVolume,
+  washOut,
+  salinityChange,
   turnover,
   unitConversion,
 ]

@@ -61,7 +61,7 @@ export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: Bench
         </CautionBlock>
       ))}
       {schedule ? (
-        <table className="bench-schedule">
+        <table className="bench-schedule" aria-label={words.schedule}>
           <thead>
             <tr>
               {schedule.columns.map((column) => (

@@ -1,0 +1,164 @@
+import {
+  dilutionFor,
+  injectionVolume,
+  leastGraduations,
+  roundInjection,
+} from '../../domain/injection/injection-volume.ts'
+import { ok } from '../../domain/result.ts'
+import { convert } from '../../domain/units/convert.ts'
+import { enteredTerm } from '../../domain/working/entered-term.ts'
+import { valueTerm } from '../../domain/working/value-term.ts'
+import { defineMessages } from '../../messages/define-messages.ts'
+import { defineCalculator, type BenchCaution } from '../definition.ts'
+import { quantity } from '../inputs.ts'
+import { line } from '../line.ts'
+
+const mostErrorPercent = 5
+const gramsPerKilogram = 1000
+
+/** The volume to inject for a weighed animal, as the syringe can take it. */
+export const injection = defineCalculator({
+  id: 'injection',
+  group: 'dose',
+  weekly: true,
+  words: defineMessages({
+    name: 'Injection',
+    purpose:
+      'The volume for a weighed animal, rounded to the syringe, with what the rounding makes of the dose.',
+    formula: 'volume = dose × weight ÷ strength',
+    'input.dose': 'Dose',
+    'help.dose': 'As the order says, of what the strength is of.',
+    'input.weight': 'Weight of the animal',
+    'help.weight': 'Weighed, not reckoned from its length.',
+    'input.weightError': 'Error of the weight',
+    'input.strength': 'Strength of the solution',
+    'input.strengthTolerance': 'Tolerance of the strength',
+    'input.graduation': 'Smallest step of the syringe',
+    'result.volume': 'Volume to inject',
+    'result.exact': 'Unrounded',
+    'result.drug': 'Drug in it',
+    'result.error': 'Rounding makes of the dose',
+    'line.drug': 'Drug needed',
+    'line.volume': 'Volume, unrounded',
+    'line.given': 'Drug in the rounded volume',
+    'line.error': 'Error of the rounding',
+    'refusal.below-half-graduation':
+      'The volume is less than half of the smallest step of this syringe. Dilute the solution, or take a finer syringe.',
+    'caution.dilute': (p: { least: string; parts: string }) =>
+      `The volume is less than ${p.least} steps of this syringe. Thinned to 1 in ${p.parts} it would be enough; only with a diluent that the label or the veterinarian names.`,
+    'caution.rounding':
+      'The rounding alone changes the dose by more than 5 %. Dilute, or take a finer syringe.',
+    'caution.decimal':
+      'One decimal place is a tenfold dose. Read the milligrams and the millilitres together.',
+    'caution.site': 'The largest volume for one site is set by the order; above it the dose is divided.',
+  }),
+  inputs: {
+    dose: quantity({
+      units: ['mg/kg', 'ug/kg'],
+      limits: { above: 0, max: 10_000, plausible: { min: 0.001, max: 500 } },
+    }),
+    weight: quantity({
+      units: ['kg', 'g', 'lb', 'oz_av', 'mg'],
+      limits: { above: 0, max: 20_000_000, plausible: { min: 0.1, max: 3_000_000 } },
+    }),
+    weightError: quantity({
+      units: ['percent'],
+      limits: { min: 0, max: 90 },
+      optional: true,
+      errorOf: 'weight',
+    }),
+    strength: quantity({
+      units: ['mg/mL', 'ug/L', 'g/L', 'percent_w_v'],
+      limits: { above: 0, max: 2_000_000 },
+    }),
+    strengthTolerance: quantity({
+      units: ['percent'],
+      limits: { min: 0, max: 90 },
+      optional: true,
+      errorOf: 'strength',
+    }),
+    graduation: quantity({ units: ['mL', 'uL'], limits: { above: 0, max: 0.1 }, optional: true }),
+  },
+  fields: {
+    doseMgPerKg: 'dose',
+    weightKg: 'weight',
+    strengthMgPerMl: 'strength',
+    graduationMl: 'graduation',
+  },
+  example: {
+    dose: { value: '10', unit: 'mg/kg' },
+    weight: { value: '1.35', unit: 'kg' },
+    strength: { value: '22.7', unit: 'mg/mL' },
+    graduation: { value: '0.01', unit: 'mL' },
+  },
+  sources: ['injection-practice'],
+  cautions: [
+    { code: 'decimal', level: 'note' },
+    { code: 'site', level: 'note' },
+  ],
+  published: ['injection_volume_mL', 'injection_volume_rounded_mL', 'injection_rounding_error_percent'],
+  compute({ dose, weight, strength, graduation }) {
+    const weightKg = weight.value / gramsPerKilogram
+    const strengthMgPerMl = strength.value / gramsPerKilogram
+    const volume = injectionVolume({ doseMgPerKg: dose.value, weightKg, strengthMgPerMl })
+    if (!volume.ok) return volume
+    const millilitres = volume.value
+    const milligrams = dose.value * weightKg
+    const working = [
+      line('drug', `${enteredTerm(dose)} * ${enteredTerm(weight)} to mg`, milligrams, 'mg'),
+      line(
+        'volume',
+        `${valueTerm(milligrams, 'mg')} / (${strengthTerm(strength.entered.unit, strength.entered.value, enteredTerm(strength))}) to mL`,
+        millilitres,
+        'mL',
+        ['drug'],
+      ),
+    ]
+    const exact = { value: millilitres, unit: 'mL', kind: 'dose' } as const
+    const drug = { key: 'drug', value: milligrams, unit: 'mg', kind: 'dose' } as const
+    if (!graduation) return ok({ figures: [{ key: 'volume', ...exact }, drug], working })
+    const { value: stepText, unit } = graduation.entered
+    const inStep = convert(millilitres, 'mL', unit)
+    const step = convert(graduation.value, 'L', 'mL')
+    if (!inStep.ok) return inStep
+    if (!step.ok) return step
+    const rounded = roundInjection(inStep.value, stepText)
+    if (!rounded.ok) return rounded
+    const parts = dilutionFor(millilitres, step.value)
+    if (!parts.ok) return parts
+    const { text, millilitres: taken, errorPercent } = rounded.value
+    const takenTerm = valueTerm(taken, unit)
+    const cautions: BenchCaution[] = []
+    if (parts.value > 1)
+      cautions.push({
+        code: 'dilute',
+        level: 'warning',
+        params: { least: leastGraduations, parts: parts.value },
+      })
+    if (Math.abs(errorPercent) > mostErrorPercent) cautions.push({ code: 'rounding', level: 'warning' })
+    return ok({
+      figures: [
+        { key: 'volume', value: inStep.value, unit, measured: text, kind: 'dose' },
+        { key: 'exact', ...exact },
+        drug,
+        { key: 'error', value: errorPercent, unit: 'percent', figures: 2, kind: 'reading' },
+      ],
+      working: [
+        ...working,
+        line(
+          'error',
+          `(${takenTerm} / (${valueTerm(millilitres, 'mL')}) - 1) * 100`,
+          errorPercent,
+          'percent',
+          ['volume'],
+        ),
+      ],
+      cautions,
+    })
+  },
+})
+
+/** A percentage stands as a plain number in an expression: 2.27 % w/v is 2.27 g in 100 mL. */
+function strengthTerm(unit: string, value: string, term: string): string {
+  return unit === 'percent_w_v' ? `${value} g / (100 mL)` : term
+}
