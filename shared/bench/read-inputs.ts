@@ -76,9 +76,7 @@ function readQuantity(
     ? unitOf(exact).dimension
     : (dimensions.find((each) => isOf(each, unit)) ?? dimensions[0])
   if (dimension === undefined) return refuse('unknown-unit', name)
-  const { above, min, max } = input.limits ?? {}
-  const rules = { dimension, field: name, above, min, max }
-  const parsed = parseQuantity({ value: digitsOf(value), unit }, definedOf(rules))
+  const parsed = parseQuantity({ value: digitsOf(value), unit }, { ...input.limits, dimension, field: name })
   if (!parsed.ok) return parsed
   if (input.whole && !Number.isInteger(parsed.value.value)) return refuse('not-whole', name)
   return parsed
@@ -92,7 +90,3 @@ const isOf = (dimension: Dimension, typed: unknown): boolean => {
 /** JSON has numbers: 25 is taken as "25". */
 const digitsOf = (value: unknown): unknown =>
   typeof value === 'number' && Number.isFinite(value) ? quantityOf(value, 'ratio').value : value
-
-function definedOf<T extends object>(rules: T): T {
-  return Object.fromEntries(Object.entries(rules).filter(([, value]) => value !== undefined)) as T
-}

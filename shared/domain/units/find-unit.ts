@@ -28,6 +28,8 @@ const wordLength = 4
  */
 export function findUnit(typed: unknown, options: FindUnitOptions = {}): Result<UnitCode, UnitTextRefusal> {
   if (typeof typed !== 'string' || typed.trim() === '') return refuse('unit-missing', 'unit')
+  // a code that fits is what programs and forms send: it needs no reading
+  if (isUnitCode(typed) && unitOf(typed).dimension === options.dimension) return ok(typed)
   const text = normaliseUnitText(typed)
   const lower = text.length >= wordLength ? text.toLowerCase() : text
   const ambiguous = own(ambiguousSpellings, text) ?? own(ambiguousSpellings, lower)
