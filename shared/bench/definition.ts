@@ -30,6 +30,8 @@ export interface Figure {
   unit: UnitCode
   /** Significant digits that the formula itself supports, 4 unless told. */
   figures?: number
+  /** A count: days, changes. It has no decimal places. */
+  whole?: true
   kind?: QuantityKind
   /** The digits as the balance or measure gives them; then they are the figure. */
   measured?: string
@@ -37,7 +39,7 @@ export interface Figure {
 
 /** A row of figures for each step of a plan; the words of a column are `column.<key>`. */
 export interface Schedule {
-  columns: readonly { key: string; unit: UnitCode; figures?: number }[]
+  columns: readonly { key: string; unit: UnitCode; figures?: number; whole?: true }[]
   rows: readonly (readonly number[])[]
 }
 

@@ -4,8 +4,8 @@ import { formatReading } from '../domain/quantities/format-reading.ts'
 import { formatWorkingValue } from '../domain/quantities/format-working-value.ts'
 import type { FormattedQuantity } from '../domain/quantities/formatted-quantity.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
-import type { BenchLine } from './definition.ts'
-import type { RoundedFigure } from './round-figure.ts'
+import type { BenchLine, Schedule } from './definition.ts'
+import { roundFigure, type RoundedFigure } from './round-figure.ts'
 
 /** A figure as it is shown: a dose without trailing zeros, everything else with the digits that it is worth. */
 export function formatFigure(figure: RoundedFigure): FormattedQuantity {
@@ -34,4 +34,9 @@ export function formatLine(
     lines.filter((each) => line.rests.includes(each.key)).map((each) => String(Math.abs(each.value))),
   )
   return { formula: formatExpression(line.expression, earlier), result: formatWorkingValue(line) }
+}
+
+/** A figure of a plan, with the digits that its column is worth. */
+export function formatCell(value: number, column: Schedule['columns'][number]): FormattedQuantity {
+  return formatFigure(roundFigure({ ...column, value }, null))
 }

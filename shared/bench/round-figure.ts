@@ -20,6 +20,7 @@ const mostFigures = 12
 export function roundFigure(figure: Figure, halfWidth: number | null): RoundedFigure {
   const { value, measured } = figure
   if (measured !== undefined) return { ...figure, significantFigures: digitsIn(measured), rounded: measured }
+  if (figure.whole) return { ...figure, significantFigures: digitsIn(String(value)), rounded: String(value) }
   const formula = Math.min(figure.figures ?? usualFigures, mostFigures)
   if (value === 0) return { ...figure, significantFigures: 1, rounded: '0' }
   const first = exponentOf(value)

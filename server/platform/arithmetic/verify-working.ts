@@ -109,7 +109,8 @@ let loaded: Promise<MathJsInstance> | undefined
 /** mathjs takes about a second to load, so it is loaded when the first working is verified. */
 function loadMath(): Promise<MathJsInstance> {
   loaded ??= import('mathjs').then(({ all, create }) => {
-    const math = create(all ?? {})
+    // a quotient that is whole but for the last binary digit is whole, as in the engines (whole-steps.ts)
+    const math = create(all ?? {}, { relTol: 1e-9, absTol: 1e-9 })
     math.createUnit('impgal', '4.54609 L')
     return math
   })

@@ -198,12 +198,11 @@ function planned(
   return {
     figures: [
       { key: 'litres', value: litres, unit: 'L', kind: 'volume' },
-      { key: 'days', value: days, unit: 'ratio' },
+      { key: 'days', value: days, unit: 'ratio', whole: true },
       { key: 'step', value: step, unit: 'PSS-78', kind: 'reading' },
     ] as const,
     working: [
-      // the count of days is the next whole number; a quotient that is whole but for the last binary digit stays
-      line('days', `ceil(${difference} / ${terms.perDay} - 0.000000001)`, days, 'ratio'),
+      line('days', `ceil(${difference} / ${terms.perDay})`, days, 'ratio'),
       ...(days === 0
         ? []
         : [
@@ -222,7 +221,7 @@ function planned(
     ],
     schedule: {
       columns: [
-        { key: 'day', unit: 'ratio' },
+        { key: 'day', unit: 'ratio', whole: true },
         { key: 'from', unit: 'PSS-78', figures: 3 },
         { key: 'to', unit: 'PSS-78', figures: 3 },
         { key: 'litres', unit: 'L' },

@@ -19,7 +19,7 @@ for (const code of Object.keys(unitTable) as UnitCode[]) {
 
 const signs: Record<string, string> = { '*': '×', '/': '÷', '+': '+', '-': minusSign }
 const constants: Record<string, string> = { pi: '3.1416' }
-const functions: Record<string, string> = { asin: 'arcsin', log: 'ln' }
+const functions: Record<string, string> = { asin: 'arcsin', log: 'ln', ceil: 'next whole of ' }
 const powers: Record<string, string> = { '^2': '²', '^3': '³' }
 const token =
   /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d(?!\.))|(?<sign> [-+*/] )|(?<other>.)/gs

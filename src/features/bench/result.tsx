@@ -1,10 +1,8 @@
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
-import { formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
-import { formatReading } from '../../../shared/domain/quantities/format-reading.ts'
 import { sources } from '../../../shared/domain/sources.ts'
-import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
 import { benchSheetWords as words, sourceMarks } from '../../../shared/messages/bench-sheet.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
@@ -42,15 +40,17 @@ export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: Bench
 /** Everything behind the result: cautions, the steps of a plan, the working, the sources. */
 export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
   const { working, schedule } = answer
-  const rows = working.map((line, at) => {
+  const [answered] = answer.figures
+  const at = working.findLastIndex((line) => line.value === answered.value)
+  const resultKey = working[at === -1 ? working.length - 1 : at]?.key
+  const rows = working.map((line) => {
     const { formula, result } = formatLine(line, working)
-    const last = at === working.length - 1
     return {
       key: line.key,
       what: sayLine(of, line),
       formula,
       result: <Quantity of={result} />,
-      kind: last ? ('sum' as const) : ('line' as const),
+      kind: line.key === resultKey ? ('sum' as const) : ('line' as const),
     }
   })
   return (
@@ -76,11 +76,7 @@ export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: Bench
               <tr key={at}>
                 {schedule.columns.map((column, i) => (
                   <td key={column.key} className="num">
-                    {
-                      formatReading(
-                        quantityOf(Number((row[i] ?? 0).toPrecision(column.figures ?? 4)), column.unit),
-                      ).text
-                    }
+                    {formatCell(row[i] ?? 0, column).text}
                   </td>
                 ))}
               </tr>
