@@ -1,6 +1,7 @@
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
+import { makeUpDose } from './calculators/make-up-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -13,6 +14,7 @@ import type { AnyCalculator } from './definition.ts'
 export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
+  makeUpDose,
   injection,
   tankVolume,
   washOut,

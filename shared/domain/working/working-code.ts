@@ -32,6 +32,8 @@ export const workingCodes = [
   // dose
   'net-volume-used',
   'changed-volume-used',
+  'kept-share',
+  'left-after-change',
   'rise-needed',
   'active-needed',
   'strength-from-w-v',
