@@ -1,8 +1,10 @@
 import { bathDose } from './calculators/bath-dose.ts'
+import { concentrationReached } from './calculators/concentration-reached.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
@@ -15,6 +17,8 @@ export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
   makeUpDose,
+  concentrationReached,
+  stockSolution,
   injection,
   tankVolume,
   washOut,

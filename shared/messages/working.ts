@@ -50,6 +50,7 @@ export const workingLabels = defineMessages({
   'change-fraction': () => 'Share of the water changed',
   'net-volume-used': () => 'Net volume used',
   'changed-volume-used': () => 'Water replaced',
+  'stock-volume-used': () => 'Volume of the stock',
   'kept-share': () => 'Share still there',
   'left-after-change': () => 'Left after the change',
   'rise-needed': () => 'Rise needed',

@@ -19,6 +19,8 @@ export interface AmountInput {
   present?: Quantity
   product: BathProduct
   measure?: Measure
+  /** What is more than this, in mg/L or µL/L, is a slip; unless told, the limit of a bath. */
+  mostTarget?: number
 }
 
 /**
@@ -33,7 +35,7 @@ export function computeAmount(
 ): Result<BathDose, DoseRefusal> {
   const { volume, volumeErrorPercent: error, product } = input
   if (error !== undefined && !(error >= 0 && error <= 100)) return refuse('error-outside-range', 'error')
-  const target = readTarget(input.target)
+  const target = readTarget(input.target, input.mostTarget)
   if (!target.ok) return target
   const rise = riseOf(target.value)
   if (!rise.ok) return rise

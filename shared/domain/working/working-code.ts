@@ -32,6 +32,7 @@ export const workingCodes = [
   // dose
   'net-volume-used',
   'changed-volume-used',
+  'stock-volume-used',
   'kept-share',
   'left-after-change',
   'rise-needed',

@@ -39,52 +39,66 @@ export const productWords = {
 
 export const basisInput = choice(['product', ...ofSubstance], { missing: 'basis-missing' })
 
+const form = ['solid', 'liquid'] as const
+const strength = {
+  units: ['percent_w_w', 'mg/mL', 'percent_w_v', 'g/L', 'g/mL_w_v'],
+  limits: { above: 0 },
+} as const
+const tolerance = {
+  units: ['percent'],
+  limits: { min: 0, max: 90 },
+  optional: true,
+  errorOf: 'strength',
+} as const
+const strengthOf = ['active', 'salt', 'base', 'total'] as const
+const missing = 'strength-basis-missing'
+const share = { units: ['percent'], limits: { above: 0, max: 100 }, optional: true } as const
+const density = {
+  units: ['g/mL', 'kg/L', 'kg/m3'],
+  limits: { min: 0.5, max: 3, plausible: { min: 0.7, max: 2 } },
+  optional: true,
+} as const
+
 /** A product as its label describes it. Its strength matters only where the target is not of the product itself. */
 export const productInputs = {
-  form: choice(['solid', 'liquid']),
-  strength: quantity({
-    units: ['percent_w_w', 'mg/mL', 'percent_w_v', 'g/L', 'g/mL_w_v'],
-    limits: { above: 0 },
-    when: { basis: ofSubstance },
-  }),
-  strengthTolerance: quantity({
-    units: ['percent'],
-    limits: { min: 0, max: 90 },
-    optional: true,
-    errorOf: 'strength',
-    when: { basis: ofSubstance },
-  }),
-  strengthOf: choice(['active', 'salt', 'base', 'total'], {
-    when: { basis: ofSubstance },
-    missing: 'strength-basis-missing',
-  }),
-  share: quantity({
-    units: ['percent'],
-    limits: { above: 0, max: 100 },
-    optional: true,
-    when: { basis: ofSubstance },
-  }),
-  density: quantity({
-    units: ['g/mL', 'kg/L', 'kg/m3'],
-    limits: { min: 0.5, max: 3, plausible: { min: 0.7, max: 2 } },
-    optional: true,
-    when: { form: ['liquid'] },
-  }),
+  form: choice(form),
+  strength: quantity({ ...strength, when: { basis: ofSubstance } }),
+  strengthTolerance: quantity({ ...tolerance, when: { basis: ofSubstance } }),
+  strengthOf: choice(strengthOf, { missing, when: { basis: ofSubstance } }),
+  share: quantity({ ...share, when: { basis: ofSubstance } }),
+  density: quantity({ ...density, when: { form: ['liquid'] } }),
 } as const
+
+/** The same where a product is asked for only when this or that is to be found. */
+export const productInputsToFind = (find: readonly string[]) =>
+  ({
+    form: choice(form, { when: { find } }),
+    strength: quantity({ ...strength, when: { find, basis: ofSubstance } }),
+    strengthTolerance: quantity({ ...tolerance, when: { find, basis: ofSubstance } }),
+    strengthOf: choice(strengthOf, { missing, when: { find, basis: ofSubstance } }),
+    share: quantity({ ...share, when: { find, basis: ofSubstance } }),
+    density: quantity({ ...density, when: { find, form: ['liquid'] } }),
+  }) as const
 
 /** How the engines of doses name these inputs in their refusals. */
 export const productFields = { purity: 'strength', netVolume: 'volume', strengthBasis: 'strengthOf' } as const
 
 interface GivenProduct {
-  form: 'solid' | 'liquid'
+  form: 'solid' | 'liquid' | undefined
   strength: ParsedQuantity | undefined
   strengthOf: 'active' | 'salt' | 'base' | 'total' | undefined
   share: ParsedQuantity | undefined
   density: ParsedQuantity | undefined
 }
 
-/** The product as the engines take it. */
-export function productOf({ form, strength, strengthOf, share, density }: GivenProduct): BathProduct {
+/** The product as the engines take it. Where no form was asked, a liquid. */
+export function productOf({
+  form = 'liquid',
+  strength,
+  strengthOf,
+  share,
+  density,
+}: GivenProduct): BathProduct {
   return {
     form,
     ...(strength ? { strength: strength.entered } : {}),
