@@ -2,8 +2,10 @@ import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { specificGravity } from './calculators/specific-gravity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
+import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
 import type { AnyCalculator } from './definition.ts'
@@ -13,6 +15,8 @@ export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
   injection,
+  unionisedAmmoniaCalculator,
+  specificGravity,
   tankVolume,
   washOut,
   salinityChange,
