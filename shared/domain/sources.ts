@@ -199,6 +199,11 @@ export const sources = {
       'Computed from atomic weights: thiosulfate and chlorine to tetrathionate, 7.00 mg of the pentahydrate per mg',
     mark: 'C',
   },
+  'thiosulfate-support-note': {
+    citation:
+      'Support note of a maker of water tests: 7.0 mg of thiosulfate pentahydrate for a milligram of chlorine',
+    mark: 'V2',
+  },
   'dechlorination-practice': {
     citation: 'Common practice, no source: ten times the chlorine for incoming tap water',
     mark: 'M',

@@ -15,6 +15,11 @@ import tankGeometry from './cases/tank-geometry.json' with { type: 'json' }
 import units from './cases/units.json' with { type: 'json' }
 import { publishedCases, type PublishedCase, type Runner } from './published-case.ts'
 import { ammoniaRunners } from './runners/ammonia-runners.ts'
+import { anaesthesiaRunners } from './runners/anaesthesia-runners.ts'
+import { copperRunners } from './runners/copper-runners.ts'
+import { growthRunners } from './runners/growth-runners.ts'
+import { injectionFeedRunners } from './runners/injection-feed-runners.ts'
+import { neutralisationRunners } from './runners/neutralisation-runners.ts'
 import { doseRunners } from './runners/dose-runners.ts'
 import { gasRunners } from './runners/gas-runners.ts'
 import { seawaterRunners } from './runners/seawater-runners.ts'
@@ -50,6 +55,11 @@ const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
   doseRunners,
   gasRunners,
   seawaterRunners,
+  anaesthesiaRunners,
+  copperRunners,
+  growthRunners,
+  injectionFeedRunners,
+  neutralisationRunners,
 ]
 
 export const runners: ReadonlyMap<string, Runner> = new Map(runnerMaps.flatMap((map) => Object.entries(map)))

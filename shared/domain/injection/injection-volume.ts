@@ -2,6 +2,7 @@ import { decimalOf } from '../quantities/decimal.ts'
 import { roundToDivision } from '../quantities/round-to-division.ts'
 import { ok, refuse, type Result } from '../result.ts'
 import { checkNumbers } from '../units/check-numbers.ts'
+import { finiteOrRefuse } from '../units/finite-or-refuse.ts'
 import type { LimitRefusal } from '../units/number-refusal.ts'
 
 export type InjectionRefusal = LimitRefusal | 'not-finite' | 'below-half-graduation'
@@ -27,7 +28,7 @@ export function injectionVolume(input: {
     [weightKg, { field: 'weightKg', unit: 'kg', above: 0, max: 20_000 }],
     [strengthMgPerMl, { field: 'strengthMgPerMl', unit: 'mg/mL', above: 0, max: 2000 }],
   ])
-  return refused ?? ok((doseMgPerKg * weightKg) / strengthMgPerMl)
+  return refused ?? finiteOrRefuse((doseMgPerKg * weightKg) / strengthMgPerMl, 'strengthMgPerMl')
 }
 
 export interface RoundedInjection {
