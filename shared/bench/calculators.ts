@@ -1,3 +1,4 @@
+import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
@@ -22,6 +23,7 @@ export const calculators: readonly AnyCalculator[] = [
   salinityChange,
   turnover,
   unitConversion,
+  ammoniaForms,
 ]
 
 const byId = new Map(calculators.map((each) => [each.id, each]))

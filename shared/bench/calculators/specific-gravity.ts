@@ -1,4 +1,4 @@
-import { ok, refuse } from '../../domain/result.ts'
+import { ok } from '../../domain/result.ts'
 import {
   densityPerSalinity68,
   densityPerSalinityAndHalf68,
@@ -52,7 +52,7 @@ export const specificGravity = defineCalculator({
     'line.density': 'Density of the water',
     'line.gravity': 'Specific gravity',
     'refusal.reference-temperature-not-stated':
-      'Type the reference temperature of the instrument. 1.025 is a salinity of 33.2 on a 25/25 °C scale, 32.9 on 20/20 °C, 32.7 on 60/60 °F (15.56 °C), and 37.2 at 25 °C against water of 4 °C.',
+      'Type the reference temperature of the instrument. 1.025 is a salinity of 33.2 on a 25/25 °C scale, 32.9 on 20/20 °C, 32.6 on 60/60 °F (15.56 °C), and 37.2 at 25 °C against water of 4 °C.',
     'refusal.salinity-as-specific-gravity':
       'This looks like a salinity. A specific gravity is written like 1.025.',
     'refusal.specific-gravity-as-salinity':
@@ -78,7 +78,11 @@ export const specificGravity = defineCalculator({
       limits: { min: -2, max: 40, plausible: { max: 35 } },
       reading: 'temperature',
     }),
-    reference: quantity({ units: ['degC', 'degF'], limits: { min: 0, max: 40 }, optional: true }),
+    reference: quantity({
+      units: ['degC', 'degF'],
+      limits: { min: 0, max: 40 },
+      missing: 'reference-temperature-not-stated',
+    }),
     instrument: choice(['hydrometer', 'seawater', 'brine'], { optional: true, when: { find: ['salinity'] } }),
   },
   fields: {
@@ -98,7 +102,6 @@ export const specificGravity = defineCalculator({
   carries: [{ to: 'reading', parameter: 'salinity', figure: 'salinity' }],
   published: ['salinity_from_specific_gravity', 'specific_gravity_from_salinity'],
   compute({ find, gravity, salinity, temperature, reference, instrument }) {
-    if (!reference) return refuse('reference-temperature-not-stated', 'reference')
     const temperatures = {
       waterTemperatureC: temperature.value,
       referenceTemperatureC: reference.value,

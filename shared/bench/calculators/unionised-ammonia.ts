@@ -1,5 +1,9 @@
-import { gramsPerGramOfNitrogen } from '../../domain/ammonia/nitrogen-forms.ts'
-import { unionisedAmmonia, type UnionisedAmmonia } from '../../domain/ammonia/unionised-ammonia.ts'
+import { ammoniaBases, ammoniaCountedAs } from '../../domain/ammonia/nitrogen-forms.ts'
+import {
+  phCalibrations,
+  unionisedConcentration,
+  type UnionisedAmmonia,
+} from '../../domain/ammonia/unionised-ammonia.ts'
 import { ok } from '../../domain/result.ts'
 import { enteredTerm } from '../../domain/working/entered-term.ts'
 import { valueTerm } from '../../domain/working/value-term.ts'
@@ -7,9 +11,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
-
-/** Grams of each form with a gram of nitrogen in it, as the working writes them. */
-const ratioTerms = { n: '1', nh3: '17.031 / 14.007', nh4: '18.039 / 14.007' } as const
+import { ammoniaRatioTerms } from './parts/ammonia-ratio-terms.ts'
 
 /** The poisonous part of the ammonia in a water, in fresh water and in sea water. */
 export const unionisedAmmoniaCalculator = defineCalculator({
@@ -30,12 +32,14 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     'input.calibration': 'What the pH meter was calibrated with',
     'help.calibration': 'Needed in brackish and sea water, from salinity 0.5 on.',
     'option.calibration.nbs': 'Ordinary (NBS, NIST) buffers',
-    'option.calibration.total': 'Buffers in sea water (total scale)',
+    'option.calibration.total': 'Buffers in sea water, or dye (total scale)',
+    'option.calibration.unknown': 'Not known',
     'input.temperature': 'Temperature of the water',
     'input.salinity': 'Salinity of the water',
     'result.nh3-n': 'Un-ionised ammonia, as nitrogen',
     'result.share': 'Un-ionised share',
     'result.nh3': 'Un-ionised ammonia, as NH₃',
+    'result.cautious': 'If the pH is on the total scale, as nitrogen',
     'line.kelvin': 'Temperature in kelvin',
     'line.nitrogen': 'Total ammonia as nitrogen',
     'line.pk-fresh': 'pK in fresh water (Emerson)',
@@ -45,13 +49,17 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     'line.share': 'Un-ionised share',
     'line.nh3-n': 'Un-ionised, as nitrogen',
     'line.nh3': 'Un-ionised, as NH₃',
+    'line.cautious-share': 'Share, if the pH is on the total scale',
+    'line.cautious': 'Un-ionised by that share, as nitrogen',
     'refusal.ph-scale-not-stated':
-      'Choose what the pH meter was calibrated with. In salt water the two scales give un-ionised ammonia that differs by a quarter.',
+      'Choose what the pH meter was calibrated with, or that it is not known. In salt water the two scales give un-ionised ammonia that differs by a quarter.',
     'refusal.ammonia-basis-not-stated':
       'Choose what the test counts ammonia as: nitrogen, NH₃ or NH₄. The same water reads 22 % or 29 % higher as NH₃ or NH₄.',
     'caution.ph': 'A pH wrong by 0.1 changes the share by about a quarter.',
     'caution.kit': 'Some kits count what a chloramine remover holds bound, and read high.',
     'caution.electrode': 'An electrode in salt water adds about 0.05 pH of its own, 12 % of the share.',
+    'caution.scale-not-known':
+      'Reckoned as if the meter was calibrated with ordinary buffers, as most are (from memory). Act on the higher figure until it is known.',
     'caution.constant': 'The constant is known to 5 %.',
   }),
   inputs: {
@@ -60,7 +68,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
       limits: { min: 0, max: 1000, plausible: { max: 20 } },
       reading: 'total-ammonia-n',
     }),
-    totalOf: choice(['n', 'nh3', 'nh4'], { missing: 'ammonia-basis-not-stated' }),
+    totalOf: choice(ammoniaBases, { missing: 'ammonia-basis-not-stated' }),
     ph: quantity({
       units: ['pH'],
       limits: { min: 4, max: 11, plausible: { min: 6, max: 9 } },
@@ -68,9 +76,15 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     }),
     temperature: quantity({ units: ['degC', 'degF'], limits: { min: -2, max: 40 }, reading: 'temperature' }),
     salinity: quantity({ units: ['PSS-78'], limits: { min: 0, max: 40 }, reading: 'salinity' }),
-    calibration: choice(['nbs', 'total'], { optional: true }),
+    calibration: choice(phCalibrations, { optional: true }),
   },
-  fields: { temperatureC: 'temperature', salinityPss78: 'salinity' },
+  fields: {
+    temperatureC: 'temperature',
+    salinityPss78: 'salinity',
+    mgPerL: 'total',
+    totalNMgPerL: 'total',
+    of: 'totalOf',
+  },
   example: {
     total: { value: '0.5', unit: 'mg/L' },
     totalOf: 'n',
@@ -93,22 +107,40 @@ export const unionisedAmmoniaCalculator = defineCalculator({
       salinityPss78: salinity.value,
       calibration,
     }
-    const found = unionisedAmmonia(water)
+    const counted = ammoniaCountedAs({ mgPerL: total.value, of: totalOf, as: 'n' })
+    if (!counted.ok) return counted
+    const nitrogen = counted.value
+    const found = unionisedConcentration({ ...water, totalNMgPerL: nitrogen })
     if (!found.ok) return found
-    const { fraction, constant } = found.value
-    const nitrogen = total.value / gramsPerGramOfNitrogen[totalOf]
-    const free = nitrogen * fraction
-    const ammonia = free * gramsPerGramOfNitrogen.nh3
+    const { fraction, constant, nMgPerL: free } = found.value
+    const ammonia = ammoniaCountedAs({ mgPerL: free, of: 'n', as: 'nh3' })
+    if (!ammonia.ok) return ammonia
+    const cautious =
+      constant === 'free' && calibration === 'unknown'
+        ? unionisedConcentration({ ...water, calibration: 'total', totalNMgPerL: nitrogen })
+        : undefined
+    if (cautious && !cautious.ok) return cautious
     const percent = fraction * 100
     const salt = constant === 'emerson' ? [] : (['electrode', 'constant'] as const)
     return ok({
       figures: [
         { key: 'nh3-n', value: free, unit: 'mg/L', figures: 3, kind: 'reading' },
         { key: 'share', value: percent, unit: 'percent', figures: 3, kind: 'reading' },
-        { key: 'nh3', value: ammonia, unit: 'mg/L', figures: 3, kind: 'reading' },
+        { key: 'nh3', value: ammonia.value, unit: 'mg/L', figures: 3, kind: 'reading' },
+        ...(cautious
+          ? [
+              {
+                key: 'cautious',
+                value: cautious.value.nMgPerL,
+                unit: 'mg/L',
+                figures: 3,
+                kind: 'reading',
+              } as const,
+            ]
+          : []),
       ],
       working: [
-        line('nitrogen', `${enteredTerm(total)} / (${ratioTerms[totalOf]}) to mg/L`, nitrogen, 'mg/L'),
+        line('nitrogen', `${enteredTerm(total)} / (${ammoniaRatioTerms[totalOf]}) to mg/L`, nitrogen, 'mg/L'),
         ...pkLines(found.value, water),
         line(
           'share',
@@ -124,15 +156,43 @@ export const unionisedAmmoniaCalculator = defineCalculator({
           'mg/L',
           ['nitrogen', 'share'],
         ),
-        line('nh3', `${valueTerm(free, 'mg/L')} * 17.031 / 14.007`, ammonia, 'mg/L', ['nh3-n']),
+        line('nh3', `${valueTerm(free, 'mg/L')} * ${ammoniaRatioTerms.nh3}`, ammonia.value, 'mg/L', [
+          'nh3-n',
+        ]),
+        ...(cautious ? cautiousLines(cautious.value, water, nitrogen) : []),
       ],
-      cautions: salt.map((code) => ({ code, level: 'note' as const })),
+      cautions: [
+        ...(cautious ? [{ code: 'scale-not-known', level: 'warning' as const }] : []),
+        ...salt.map((code) => ({ code, level: 'note' as const })),
+      ],
       sources: constant === 'emerson' ? ['emerson-1975'] : ['clegg-whitfield-1995', 'ph-scale-rule'],
     })
   },
 })
 
 const pkKey = { emerson: 'pk-fresh', free: 'pk-free', total: 'pk-total' } as const
+
+/** What the other scale would make of the same pH: the bound to act on while the calibration is not known. */
+function cautiousLines(
+  found: UnionisedAmmonia & { nMgPerL: number },
+  water: { ph: number; temperatureC: number; salinityPss78: number },
+  nitrogen: number,
+): BenchLine[] {
+  const percent = found.fraction * 100
+  const pk = pkLines(found, water).filter((each) => each.key === pkKey.total)
+  const exponent = `${valueTerm(found.pk, 'ratio')} - ${valueTerm(water.ph, 'pH')}`
+  return [
+    ...pk,
+    line('cautious-share', `100 / (1 + 10^(${exponent}))`, percent, 'percent', [pkKey.total]),
+    line(
+      'cautious',
+      `${valueTerm(nitrogen, 'mg/L')} * ${valueTerm(percent, 'percent')} / 100`,
+      found.nMgPerL,
+      'mg/L',
+      ['nitrogen', 'cautious-share'],
+    ),
+  ]
+}
 
 /** Kelvin first, then the constant: in fresh water in one line, in salt water from its value at salinity 0. */
 function pkLines(

@@ -25,6 +25,21 @@ describe('un-ionised ammonia', () => {
     expect(n / nh3).toBeCloseTo(1.2159, 3)
     expect(n / nh4).toBeCloseTo(1.2879, 3)
   })
+  it('gives both scales where the calibration is not known, and says to act on the higher', async () => {
+    // pH 8, 25 °C, S 35: 0.0440 on the free and 0.0556 on the total scale (published examples uia.cw07, uia.cw03)
+    const { figures, cautions } = await ask('un-ionised-ammonia', {
+      ...sea,
+      ph: '8 pH',
+      calibration: 'unknown',
+    })
+    expect(Math.abs(figures[0].value - 0.044)).toBeLessThanOrEqual(0.00006)
+    expect(figures[3]?.key).toBe('cautious')
+    expect(Math.abs((figures[3]?.value ?? 0) - 0.0556)).toBeLessThanOrEqual(0.00006)
+    expect(cautions.find((one) => one.code === 'scale-not-known')?.level).toBe('warning')
+    const inFresh = await ask('un-ionised-ammonia', { ...fresh, calibration: 'unknown' })
+    expect(inFresh.figures).toHaveLength(3)
+    expect(inFresh.cautions.map((one) => one.code)).not.toContain('scale-not-known')
+  })
   it.each([
     ['a pH of no stated scale in sea water', { calibration: '' }, 'calibration ph-scale-not-stated'],
     ['a test that does not say what it counts', { totalOf: '' }, 'totalOf ammonia-basis-not-stated'],
@@ -32,6 +47,23 @@ describe('un-ionised ammonia', () => {
     ['a pH of 15', { ph: '15 pH' }, 'ph above-most'],
   ])('refuses %s', (_, change, refused) => {
     expect(refusalsOf('un-ionised-ammonia', { ...sea, ...change })).toEqual([refused])
+  })
+})
+
+describe('ammonia counted as another form', () => {
+  it.each([
+    // 17.031/14.007, its inverse and 18.039/14.007, ± 0.0002 (check values nh3conv.01 to nh3conv.03, computed)
+    ['n', 'nh3', 1.2159],
+    ['nh3', 'n', 0.8224],
+    ['n', 'nh4', 1.2879],
+  ])('of 1 mg/L as %s is as %s %d', async (of, as, expected) => {
+    const { figures } = await ask('ammonia-forms', { reading: '1000 ug/L', of, as })
+    expect(Math.abs(figures[0].value - expected)).toBeLessThanOrEqual(0.0002)
+  })
+  it('asks what the test counts', () => {
+    expect(refusalsOf('ammonia-forms', { reading: '1 mg/L', as: 'n' })).toEqual([
+      'of ammonia-basis-not-stated',
+    ])
   })
 })
 
@@ -59,6 +91,11 @@ describe('specific gravity', () => {
   it.each([
     ['no reference temperature', { reference: '' }, 'reference reference-temperature-not-stated'],
     ['a salinity typed as gravity', { gravity: '25 SG' }, 'gravity salinity-as-specific-gravity'],
+    [
+      'a salinity typed as gravity, in brackish water',
+      { gravity: '2 SG' },
+      'gravity salinity-as-specific-gravity',
+    ],
     ['more than the scale', { gravity: '1.2 SG' }, 'gravity above-most'],
   ])('refuses %s', (_, change, refused) => {
     expect(refusalsOf('specific-gravity', { ...given, ...change })).toEqual([refused])
