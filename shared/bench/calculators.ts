@@ -9,6 +9,7 @@ import { turnover } from './calculators/turnover.ts'
 import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
+import { waterChanges } from './calculators/water-changes.ts'
 import type { AnyCalculator } from './definition.ts'
 
 /** Every calculator of the bench, in the order in which the bench shows them. A new one is a file and a line here. */
@@ -20,6 +21,7 @@ export const calculators: readonly AnyCalculator[] = [
   specificGravity,
   tankVolume,
   washOut,
+  waterChanges,
   salinityChange,
   turnover,
   unitConversion,

@@ -5,7 +5,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
-import { ammoniaRatioTerms } from './parts/ammonia-ratio-terms.ts'
+import { asNitrogenTerm, fromNitrogenTerm } from './parts/ammonia-terms.ts'
 
 const bases = { n: 'As nitrogen (N)', nh3: 'As NH₃', nh4: 'As NH₄' }
 
@@ -56,7 +56,7 @@ export const ammoniaForms = defineCalculator({
       working: [
         line(
           'counted',
-          `${enteredTerm(reading)} / (${ammoniaRatioTerms[of]}) * (${ammoniaRatioTerms[as]}) to mg/L`,
+          `${fromNitrogenTerm(asNitrogenTerm(enteredTerm(reading), of), as)} to mg/L`,
           counted.value,
           'mg/L',
         ),

@@ -11,7 +11,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
-import { ammoniaRatioTerms } from './parts/ammonia-ratio-terms.ts'
+import { asNitrogenTerm, fromNitrogenTerm } from './parts/ammonia-terms.ts'
 
 /** The poisonous part of the ammonia in a water, in fresh water and in sea water. */
 export const unionisedAmmoniaCalculator = defineCalculator({
@@ -140,7 +140,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
           : []),
       ],
       working: [
-        line('nitrogen', `${enteredTerm(total)} / (${ammoniaRatioTerms[totalOf]}) to mg/L`, nitrogen, 'mg/L'),
+        line('nitrogen', `${asNitrogenTerm(enteredTerm(total), totalOf)} to mg/L`, nitrogen, 'mg/L'),
         ...pkLines(found.value, water),
         line(
           'share',
@@ -156,9 +156,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
           'mg/L',
           ['nitrogen', 'share'],
         ),
-        line('nh3', `${valueTerm(free, 'mg/L')} * ${ammoniaRatioTerms.nh3}`, ammonia.value, 'mg/L', [
-          'nh3-n',
-        ]),
+        line('nh3', fromNitrogenTerm(valueTerm(free, 'mg/L'), 'nh3'), ammonia.value, 'mg/L', ['nh3-n']),
         ...(cautious ? cautiousLines(cautious.value, water, nitrogen) : []),
       ],
       cautions: [

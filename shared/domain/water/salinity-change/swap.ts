@@ -1,6 +1,7 @@
 import { readsAsSpecificGravity } from '../../seawater/specific-gravity.ts'
 import { ok, refuse, type Result } from '../../result.ts'
 import { checkNumbers } from '../../units/check-numbers.ts'
+import { finiteOrRefuse } from '../../units/finite-or-refuse.ts'
 import type { LimitRefusal } from '../../units/number-refusal.ts'
 import { volumeRules } from '../flow/flow-limits.ts'
 
@@ -78,7 +79,8 @@ export function swapLitres(
  * Litres that have to run through at a constant level: V ln((S1 − Sr) ÷ (S2 − Sr)). The salinity of the replacement
  * water itself is never quite reached.
  *
- * @refuses as swapLitres · target-beyond-replacement also where the target is the replacement's own
+ * @refuses as swapLitres · target-beyond-replacement also where the target is the replacement's own · not-finite
+ *          (targetSalinity) so near to it that no volume reaches it
  * @source  salt-balance · check value sal.06
  */
 export function continuousExchangeLitres(
@@ -91,7 +93,8 @@ export function continuousExchangeLitres(
   const { startSalinity, targetSalinity, replacementSalinity, volumeLitres } = input
   if (startSalinity === targetSalinity) return ok(0)
   if (targetSalinity === replacementSalinity) return refuse('target-beyond-replacement', 'targetSalinity')
-  return ok(
+  return finiteOrRefuse(
     volumeLitres * Math.log((startSalinity - replacementSalinity) / (targetSalinity - replacementSalinity)),
+    'targetSalinity',
   )
 }
