@@ -1,6 +1,8 @@
+import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
+import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -17,6 +19,8 @@ export const calculators: readonly AnyCalculator[] = [
   washOut,
   salinityChange,
   turnover,
+  oxygenSaturation,
+  barometricPressure,
   unitConversion,
 ]
 
