@@ -8,6 +8,7 @@ import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
+import { waterChanges } from './calculators/water-changes.ts'
 import type { AnyCalculator } from './definition.ts'
 
 /** Every calculator of the bench, in the order in which the bench shows them. A new one is a file and a line here. */
@@ -17,6 +18,7 @@ export const calculators: readonly AnyCalculator[] = [
   injection,
   tankVolume,
   washOut,
+  waterChanges,
   salinityChange,
   turnover,
   oxygenSaturation,
