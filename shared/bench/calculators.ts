@@ -1,7 +1,9 @@
 import { ammoniaForms } from './calculators/ammonia-forms.ts'
+import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
+import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
@@ -24,6 +26,8 @@ export const calculators: readonly AnyCalculator[] = [
   waterChanges,
   salinityChange,
   turnover,
+  oxygenSaturation,
+  barometricPressure,
   unitConversion,
   ammoniaForms,
 ]
