@@ -1,6 +1,9 @@
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
+import { lengthWeight } from './calculators/length-weight.ts'
+import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -17,6 +20,9 @@ export const calculators: readonly AnyCalculator[] = [
   washOut,
   salinityChange,
   turnover,
+  medicatedFeed,
+  groupBiomassCalculator,
+  lengthWeight,
   unitConversion,
 ]
 
