@@ -1,6 +1,7 @@
 import { readsAsSpecificGravity } from '../../seawater/specific-gravity.ts'
 import { ok, refuse, type Result } from '../../result.ts'
 import { checkNumbers } from '../../units/check-numbers.ts'
+import { finiteOrRefuse } from '../../units/finite-or-refuse.ts'
 import type { LimitRefusal } from '../../units/number-refusal.ts'
 import { volumeRules } from '../flow/flow-limits.ts'
 
@@ -74,7 +75,7 @@ export function swapLitres(
 /**
  * Litres that have to run through at a constant level: V ln((S1 − Sr) ÷ (S2 − Sr)).
  *
- * @refuses as swapLitres
+ * @refuses as swapLitres · not-finite (targetSalinity) so near to the replacement water that no volume reaches it
  * @source  salt-balance · check value sal.06
  */
 export function continuousExchangeLitres(
@@ -86,7 +87,8 @@ export function continuousExchangeLitres(
   if (!checked.ok) return checked
   const { startSalinity, targetSalinity, replacementSalinity, volumeLitres } = input
   if (startSalinity === targetSalinity) return ok(0)
-  return ok(
+  return finiteOrRefuse(
     volumeLitres * Math.log((startSalinity - replacementSalinity) / (targetSalinity - replacementSalinity)),
+    'targetSalinity',
   )
 }
