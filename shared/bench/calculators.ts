@@ -2,7 +2,10 @@ import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
+import { lengthWeight } from './calculators/length-weight.ts'
+import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
@@ -26,6 +29,9 @@ export const calculators: readonly AnyCalculator[] = [
   waterChanges,
   salinityChange,
   turnover,
+  medicatedFeed,
+  groupBiomassCalculator,
+  lengthWeight,
   oxygenSaturation,
   barometricPressure,
   unitConversion,
