@@ -141,13 +141,18 @@ describe('sea water', () => {
 describe('specific gravity', () => {
   it('gives the salinity back that it was computed from', () => {
     fc.assert(
-      fc.property(number(1.051, 41.9), temperature, number(0, 40), (salinityPss78, waterTemperatureC, ref) => {
-        const at = { waterTemperatureC, referenceTemperatureC: ref }
-        const specificGravity = valueOf(specificGravityFromSalinity({ salinityPss78, ...at }))
-        fc.pre(specificGravity >= 0.995 && specificGravity <= 1.035)
-        const back = valueOf(salinityFromSpecificGravity({ specificGravity, ...at }))
-        expect(Math.abs(back - salinityPss78)).toBeLessThan(1e-8)
-      }),
+      fc.property(
+        number(1.051, 41.9),
+        temperature,
+        number(0, 40),
+        (salinityPss78, waterTemperatureC, ref) => {
+          const at = { waterTemperatureC, referenceTemperatureC: ref }
+          const specificGravity = valueOf(specificGravityFromSalinity({ salinityPss78, ...at }))
+          fc.pre(specificGravity >= 0.995 && specificGravity <= 1.035)
+          const back = valueOf(salinityFromSpecificGravity({ specificGravity, ...at }))
+          expect(Math.abs(back - salinityPss78)).toBeLessThan(1e-8)
+        },
+      ),
     )
   })
 
