@@ -103,7 +103,9 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     expect(await page.getByLabel('Target is counted', { exact: true }).inputValue()).toBe('free')
     expect(await field(page, 'Balance or measure reads to').inputValue()).toBe('0.01')
     await fromBench(page).getByText('What was asked on the bench').click()
-    await fromBench(page).getByText(/Net volume of the water: 2,181\.4\sL \(QT-7: .* found 30\sNov\s2026, 10:00, UTC−4/).waitFor()
+    await fromBench(page)
+      .getByText(/Net volume of the water: 2,181\.4\sL \(QT-7: .* found 30\sNov\s2026, 10:00, UTC−4/)
+      .waitFor()
     await expectSound(page, 'an order from the bench')
     // nothing is kept by itself
     const { body } = await (await app.as('technician')).agent.get('/api/orders').expect(200)
@@ -151,6 +153,30 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     expect(body.volumes[0].note).toMatch(/^From the bench: Volume of a tank and its system, 299/)
     // 270 L × 0.88 + 60 L + 1.81 L, worked by hand
     expect(body.volumes[0].netVolumeLitres).toBeCloseTo(299.406, 2)
+    await page.context().close()
+  })
+
+  it('goes into the form of readings as one, with how it was worked out as its note', async () => {
+    const code = `QT-${String(size.width)}`
+    const page = await signedIn('keeper', size, '/bench/specific-gravity')
+    await button(page, 'Fill in an example').click()
+    await choose(page, 'For which enclosure', code)
+    await button(page, 'Use as a reading of salinity').click()
+    await page.waitForURL(/\/measure$/)
+    await fromBench(page)
+      .getByText(/worked out, not measured/)
+      .waitFor()
+    const salinity = page.getByRole('textbox', { name: /^Salinity/ })
+    const figure = await salinity.inputValue()
+    // 1.025 × 997.05 kg/m³ at 25 °C is the density of sea water of 33.2
+    expect(figure).toBe('33.2')
+    await expectSound(page, 'a reading from the bench')
+    await page.getByRole('button', { name: /Record 1\sreading/ }).click()
+    await page.getByRole('heading', { name: code, level: 1 }).waitFor()
+    const { body } = await (await app.as('keeper')).agent.get(`/api/enclosures/${code}/readings`).expect(200)
+    expect(body.rows).toHaveLength(1)
+    expect(body.rows[0]).toMatchObject({ parameter: 'salinity', value: { value: figure, unit: 'PSS-78' } })
+    expect(body.rows[0].note).toMatch(/^From the bench: Specific gravity.*Asked: .*1\.025.*Working: /)
     await page.context().close()
   })
 

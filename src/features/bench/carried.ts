@@ -7,6 +7,7 @@ import { roundedTo } from '../../../shared/bench/round-figure.ts'
 import { sayInputs } from '../../../shared/bench/say-inputs.ts'
 import { say, sayLine } from '../../../shared/bench/words.ts'
 import { withoutTrailingZeros } from '../../../shared/domain/quantities/number-text.ts'
+import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import { concentrationBases, type ConcentrationBasis } from '../../../shared/domain/units/basis.ts'
 import { convert } from '../../../shared/domain/units/convert.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
@@ -47,7 +48,7 @@ export function saidOf(of: AnyCalculator, { body, answer, originOf }: Asked): Be
  * the server works everything out again.
  *
  * @param enclosureId the enclosure chosen on the bench; null when none is
- * @returns null where the answer has no such figure
+ * @returns null where the answer has no such figure, or it is only what was typed: that is no reading worked out
  */
 export function carriedOf(
   of: AnyCalculator,
@@ -67,12 +68,17 @@ export function carriedOf(
     }
     case 'reading': {
       const figure = answer.figures.find((one) => one.key === carry.figure)
-      if (!figure) return null
+      if (!figure || isTyped(of, carry.parameter, read)) return null
       const value = { value: figure.rounded, unit: figure.unit }
       return { to: 'reading', said, parameter: carry.parameter, value }
     }
   }
 }
+
+const isTyped = (of: AnyCalculator, parameter: ReadingParameter, read: Read): boolean =>
+  Object.entries(of.inputs).some(
+    ([name, input]) => input.kind === 'quantity' && input.reading === parameter && read[name] !== undefined,
+  )
 
 type CarriedSheet = Extract<BenchCarry, { to: 'volume' }>['sheet']
 

@@ -15,6 +15,7 @@ import { EnclosureChooser, everyEnclosure } from '../enclosures/index.ts'
 import { bodyOf, keptDraft } from './bench-draft.ts'
 import type { Draft } from './bench-draft.ts'
 import { carriedOf } from './carried.ts'
+import type { Asked } from './carried.ts'
 import type { EnclosureWater } from './use-enclosure-water.ts'
 
 /** The right that the form at the other end asks for. */
@@ -51,15 +52,19 @@ export function CarryPane({
   const { data } = useQuery(everyEnclosure)
   const [ownId, setOwnId] = useState<string | null>(null)
   const chosenId = water.id
-  const carries = of.carries ?? []
+  const asked: Asked = {
+    body: bodyOf(of, draft),
+    answer,
+    originOf: (name) => water.originOf(name, draft[name]),
+  }
+  const carries = (of.carries ?? []).filter((carry) => carriedOf(of, carry, asked, null) !== null)
   if (carries.length === 0) return null
   const enclosureId = chosenId ?? ownId
   const code = data?.rows.find((row) => row.id === enclosureId)?.code
   const needsPlace = carries.some(({ to }) => to !== 'order' && mayOf(me, rights[to]).allowed)
 
   const take = async (carry: Carry) => {
-    const originOf = (name: string) => water.originOf(name, draft[name])
-    const carried = carriedOf(of, carry, { body: bodyOf(of, draft), answer, originOf }, enclosureId)
+    const carried = carriedOf(of, carry, asked, enclosureId)
     if (!carried) return
     const form =
       carry.to === 'order'
