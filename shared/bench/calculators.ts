@@ -1,9 +1,11 @@
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { injection } from './calculators/injection.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
@@ -22,6 +24,8 @@ export const calculators: readonly AnyCalculator[] = [
   salinityChange,
   turnover,
   oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
   barometricPressure,
   unitConversion,
 ]
