@@ -1,6 +1,7 @@
 import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
@@ -8,6 +9,7 @@ import { lengthWeight } from './calculators/length-weight.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -33,6 +35,8 @@ export const calculators: readonly AnyCalculator[] = [
   groupBiomassCalculator,
   lengthWeight,
   oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
   barometricPressure,
   unitConversion,
   ammoniaForms,
