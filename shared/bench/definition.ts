@@ -88,9 +88,7 @@ export interface VolumeCarry<Inputs> {
 
 /** Where a result can be taken further. */
 export type Carry<Inputs = Readonly<Record<string, Input>>> =
-  | OrderCarry
-  | VolumeCarry<Inputs>
-  | { to: 'reading'; parameter: ReadingParameter; figure: string }
+  OrderCarry | VolumeCarry<Inputs> | { to: 'reading'; parameter: ReadingParameter; figure: string }
 
 /**
  * All there is to say of one calculator. The bench screen, the API and its documents, the page of published values and

@@ -84,7 +84,8 @@ export function useEnclosureWater(
     choose,
     forget,
     /** Where the figure in a field comes from; undefined where a person typed it. */
-    originOf: (name: string, given: Draft[string] | undefined) => originOf(chosen?.figures[name], given, zone),
+    originOf: (name: string, given: Draft[string] | undefined) =>
+      originOf(chosen?.figures[name], given, zone),
     /** What is said beside a field; undefined where no enclosure has anything to say. */
     note(name: string, given: Draft[string] | undefined): FieldNote | undefined {
       const figure = chosen?.figures[name]

@@ -77,7 +77,9 @@ export function emptyField(
 }
 
 /** Whether a field still holds the figure of the bench. */
-export function isAsComputed(field: ReadingField): field is ReadingField & Required<Pick<ReadingField, 'computed'>> {
+export function isAsComputed(
+  field: ReadingField,
+): field is ReadingField & Required<Pick<ReadingField, 'computed'>> {
   const { computed } = field
   return computed !== undefined && field.value.trim() === computed.value && field.unit === computed.unit
 }

@@ -28,7 +28,14 @@ import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { CarriedReading } from './carried-water.tsx'
 import { useRecordReadings } from './mutations.ts'
 import { parametersOf } from './parameter-order.ts'
-import { emptyField, entryUnitsOf, judgeField, pointerOf, readingsBody, withComputed } from './reading-form-model.ts'
+import {
+  emptyField,
+  entryUnitsOf,
+  judgeField,
+  pointerOf,
+  readingsBody,
+  withComputed,
+} from './reading-form-model.ts'
 import type { ReadingField } from './reading-form-model.ts'
 import { rangeText, readingText } from './reading-text.ts'
 import { parameterHeading } from './parameter-heading.ts'
