@@ -1,12 +1,23 @@
+import { ammoniaForms } from './calculators/ammonia-forms.ts'
+import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
+import { lengthWeight } from './calculators/length-weight.ts'
+import { medicatedFeed } from './calculators/medicated-feed.ts'
+import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
+import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
+import { specificGravity } from './calculators/specific-gravity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
+import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
 import { waterChanges } from './calculators/water-changes.ts'
@@ -20,12 +31,22 @@ export const calculators: readonly AnyCalculator[] = [
   concentrationReached,
   stockSolution,
   injection,
+  unionisedAmmoniaCalculator,
+  specificGravity,
   tankVolume,
   washOut,
   waterChanges,
   salinityChange,
   turnover,
+  medicatedFeed,
+  groupBiomassCalculator,
+  lengthWeight,
+  oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
+  barometricPressure,
   unitConversion,
+  ammoniaForms,
 ]
 
 const byId = new Map(calculators.map((each) => [each.id, each]))

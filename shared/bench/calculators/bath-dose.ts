@@ -69,7 +69,7 @@ export const bathDose = defineCalculator({
     { code: 'volume', level: 'note' },
     { code: 'second', level: 'note' },
   ],
-  carries: [{ to: 'order' }],
+  carries: [{ to: 'order', target: 'target', basis: 'basis', division: 'division' }],
   published: ['bath_product_volume_mL', 'bath_product_mass', 'bath_product_mass_g', 'topup_dose_mg'],
   compute(given) {
     const { target, basis, volume, present, division } = given
