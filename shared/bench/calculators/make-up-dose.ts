@@ -96,7 +96,7 @@ export const makeUpDose = defineCalculator({
     { code: 'order', level: 'note' },
     { code: 'volume', level: 'note' },
   ],
-  carries: [{ to: 'order' }],
+  carries: [{ to: 'order', target: 'target', basis: 'basis', division: 'division' }],
   published: ['topup_dose_mg'],
   compute(given) {
     const { target, basis, volume, division } = given

@@ -120,7 +120,6 @@ export const stockSolution = defineCalculator({
     { code: 'label', level: 'warning' },
     { code: 'second', level: 'note' },
   ],
-  carries: [{ to: 'order' }],
   published: ['stock_volume_mL_simple', 'stock_volume_mL_exact', 'priming_dose_mL'],
   compute(given) {
     const { find, stockStrength, basis, stockVolume, target, volume, way, division } = given
