@@ -4,6 +4,7 @@ import { bathDose } from './calculators/bath-dose.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
@@ -29,6 +30,7 @@ export const calculators: readonly AnyCalculator[] = [
   makeUpDose,
   concentrationReached,
   stockSolution,
+  flowThroughBath,
   injection,
   unionisedAmmoniaCalculator,
   specificGravity,
