@@ -148,7 +148,6 @@ export const flowThroughBath = defineCalculator({
   example: {
     find: 'rate',
     flow: { value: '20', unit: 'L/min' },
-    flowError: { value: '5', unit: 'percent' },
     target: { value: '25', unit: 'mg/L' },
     basis: 'active',
     stockStrength: { value: '100', unit: 'mg/mL' },
