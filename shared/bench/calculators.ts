@@ -4,6 +4,7 @@ import { bathDose } from './calculators/bath-dose.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
+import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
@@ -11,6 +12,7 @@ import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
+import { seawaterDensity } from './calculators/seawater-density.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
@@ -37,6 +39,8 @@ export const calculators: readonly AnyCalculator[] = [
   oxygenSaturation,
   salinityFromConductivity,
   conductivityFromSalinity,
+  seawaterDensity,
+  freezingPoint,
   barometricPressure,
   unitConversion,
   ammoniaForms,
