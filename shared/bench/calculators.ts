@@ -6,6 +6,7 @@ import { conductivityFromSalinity } from './calculators/conductivity-from-salini
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
+import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
@@ -14,6 +15,7 @@ import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
+import { seawaterDensity } from './calculators/seawater-density.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -45,6 +47,8 @@ export const calculators: readonly AnyCalculator[] = [
   oxygenSaturation,
   salinityFromConductivity,
   conductivityFromSalinity,
+  seawaterDensity,
+  freezingPoint,
   barometricPressure,
   unitConversion,
   ammoniaForms,
