@@ -1,22 +1,23 @@
 import { convert } from '../domain/units/convert.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
 import type { UnitCode } from '../domain/units/unit-table.ts'
-import type { AnyCalculator, Figure, Plot } from './definition.ts'
+import type { AnyCalculator, Plot } from './definition.ts'
 import { evaluate, type BenchAnswer } from './evaluate.ts'
 import type { QuantityInput } from './inputs.ts'
 import { isAsked, readInputs } from './read-inputs.ts'
+import type { RoundedFigure } from './round-figure.ts'
 
 export interface CurvePoint {
   /** In the unit of the horizontal axis. */
   across: number
   /** In the unit of the vertical axis; null where the calculator refuses an answer: the line has a gap there. */
   up: number | null
-  /** The point at what the person typed. */
-  own?: true
+  /** The point at what the person typed, with the figure as the result shows it. */
+  own?: RoundedFigure
 }
 
 /** One axis: what is read off it, and how it is divided. */
-export interface CurveAxis extends Pick<Figure, 'unit' | 'figures' | 'whole' | 'kind'> {
+export interface CurveAxis extends Pick<RoundedFigure, 'unit' | 'figures' | 'whole' | 'kind'> {
   /** Key of its name among the words of the calculator. */
   word: string
   /** `tenfold`: equal steps are powers of ten; everything on the axis is then above zero. */
@@ -28,6 +29,8 @@ export interface Curve {
   up: CurveAxis
   /** From left to right, at most `mostPoints`, at least two with an answer, all finite. */
   points: readonly CurvePoint[]
+  /** Each point is a step of a plan, and between them there is nothing to read. */
+  steps?: true
 }
 
 /** The person's own point among them. */
@@ -71,7 +74,7 @@ function planned({ across, up }: Columns, { schedule }: BenchAnswer): Curve | nu
     .filter((point) => Number.isFinite(point.across) && Number.isFinite(point.up))
     .sort((a, b) => a.across - b.across)
   const axis = ({ key, ...rest }: typeof left) => ({ ...rest, word: `column.${key}`, scale: 'even' as const })
-  return points.length < 2 ? null : { across: axis(left), up: axis(right), points }
+  return points.length < 2 ? null : { across: axis(left), up: axis(right), points, steps: true }
 }
 
 function varied(of: AnyCalculator, plot: Varied, typed: unknown): Curve | null {
@@ -88,7 +91,7 @@ function varied(of: AnyCalculator, plot: Varied, typed: unknown): Curve | null {
     range: { from: Math.min(from, own?.value ?? from), to: Math.max(to, own?.value ?? to) },
     whole: input.whole,
     own: own?.value,
-    figureAt: (across: number): Figure | undefined => {
+    figureAt: (across: number): RoundedFigure | undefined => {
       // what the person typed is asked as they typed it
       const evaluation = evaluate(of, across === own?.value ? body : at(across))
       return evaluation.ok ? evaluation.answer.figures.find(({ key }) => key === plot.figure) : undefined
@@ -138,33 +141,33 @@ interface Sampled {
   range: { from: number; to: number }
   whole: true | undefined
   own: number | undefined
-  figureAt: (across: number) => Figure | undefined
+  figureAt: (across: number) => RoundedFigure | undefined
 }
 
-/** Figures in one unit: that of the first; what cannot be put in it is a gap. */
-function sample({ range, whole, own, figureAt }: Sampled): {
+interface Samples {
   points: CurvePoint[]
-  figure: Figure | undefined
-} {
+  figure: RoundedFigure | undefined
+}
+
+/** Figures in one unit: that of the person's own point, or of the first; what cannot be put in it is a gap. */
+function sample({ range, whole, own, figureAt }: Sampled): Samples {
   const places = new Set(placesOf(range, whole))
   if (own !== undefined) places.add(own)
-  let first: Figure | undefined
-  const points = [...places]
-    .sort((a, b) => a - b)
-    .map((across): CurvePoint => {
-      const figure = figureAt(across)
-      first ??= figure
-      const up = figure && first ? convert(figure.value, figure.unit, first.unit) : undefined
-      return { across, up: up?.ok ? up.value : null, ...(across === own ? { own: true as const } : {}) }
-    })
-  return { points, figure: first }
+  const found = [...places].sort((a, b) => a - b).map((across) => ({ across, figure: figureAt(across) }))
+  const figure = (found.find(({ across }) => across === own) ?? found.find((each) => each.figure))?.figure
+  const points = found.map(({ across, figure: each }): CurvePoint => {
+    const up = each && figure ? convert(each.value, each.unit, figure.unit) : undefined
+    return {
+      across,
+      up: up?.ok ? up.value : null,
+      ...(each && across === own ? { own: each } : {}),
+    }
+  })
+  return { points, figure }
 }
 
 /** Where most of the axis has no answer, the part that has one is looked at again by itself. */
-function closerLook(
-  sampled: Sampled,
-  seen: { points: CurvePoint[]; figure: Figure | undefined },
-): { points: CurvePoint[]; figure: Figure | undefined } {
+function closerLook(sampled: Sampled, seen: Samples): Samples {
   const { points } = seen
   const found = answered(points)
   if (found.length === 0 || found.length * 2 > points.length) return seen

@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { useDeferredValue, useMemo, useState } from 'react'
 import { Link } from 'react-router-dom'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate } from '../../../shared/bench/evaluate.ts'
@@ -10,13 +10,17 @@ import { Cartouche } from '../../ui/cartouche.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { bodyOf, emptyDraft, exampleDraft, isUntouched } from './bench-draft.ts'
 import { InputFields } from './input-fields.tsx'
+import { BenchPlot } from './plot.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 
 /** One calculator: its fields, and the figure as one types, by the same code that the server answers with. */
 export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   const [draft, setDraft] = useState(() => emptyDraft(of, rememberedUnits()))
-  const evaluation = useMemo(() => evaluate(of, bodyOf(of, draft)), [of, draft])
+  const body = useMemo(() => bodyOf(of, draft), [of, draft])
+  const evaluation = useMemo(() => evaluate(of, body), [of, body])
+  // the curve asks the calculator dozens of times: it follows once the figure stands
+  const drawnBody = useDeferredValue(body)
   const untouched = isUntouched(draft)
   const filled = (name: string) => {
     const given = draft[name]
@@ -73,7 +77,9 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
         </section>
         {evaluation.ok ? (
           <div className="pane stack">
-            <ResultGrounds of={of} answer={evaluation.answer} />
+            <ResultGrounds of={of} answer={evaluation.answer}>
+              <BenchPlot of={of} body={drawnBody} />
+            </ResultGrounds>
           </div>
         ) : null}
       </Area>

@@ -59,7 +59,9 @@ describe('a curve over one input', () => {
     expect([curve.points[0]?.across, curve.points.at(-1)?.across]).toEqual([0, 480])
     // 10 × exp(−25 ÷ 1000 × t), the stirred tank
     for (const { across: t, up } of curve.points) expect(up).toBeCloseTo(10 * Math.exp(-0.025 * t), 12)
-    expect(ownOf(curve)).toEqual([{ across: 60, up: expect.closeTo(2.2313, 4), own: true }])
+    expect(ownOf(curve)).toMatchObject([
+      { across: 60, up: expect.closeTo(2.2313, 4), own: { rounded: '2.231', unit: 'mg/L' } },
+    ])
     expect(curve.across).toEqual({ word: 'input.elapsed', unit: 'min', scale: 'even' })
     // to a few parts in a million of the beginning: powers of ten
     expect(curve.up).toEqual({ word: 'result.left', unit: 'mg/L', scale: 'tenfold' })
@@ -69,16 +71,21 @@ describe('a curve over one input', () => {
     const curve = curveAt(at('wash-out'), { ...left, elapsed: '1.5 h' })
     expect(curve.across.unit).toBe('h')
     expect([curve.points[0]?.across, curve.points.at(-1)?.across]).toEqual([0, 8])
-    expect(ownOf(curve)).toEqual([{ across: 1.5, up: expect.closeTo(1.054, 4), own: true }])
+    expect(ownOf(curve)).toMatchObject([{ across: 1.5, up: expect.closeTo(1.054, 4) }])
     expect(across(curve).slice(0, 3)).toEqual([0, 0.25, 0.5])
   })
 
   it('reaches to what was typed', () => {
     const curve = curveAt(straight, { x: '250 L' })
-    expect(curve.points.at(-1)).toEqual({ across: 250, up: 500, own: true })
+    expect(curve.points.at(-1)).toMatchObject({ across: 250, up: 500, own: { rounded: '500.0' } })
     const millilitres = curveAt(straight, { x: '137 mL' })
     expect(millilitres.points.at(-1)).toEqual({ across: 100_000, up: 200 })
-    expect(ownOf(millilitres)).toEqual([{ across: 137, up: 0.274, own: true }])
+    expect(ownOf(millilitres)).toMatchObject([{ across: 137, up: 0.274 }])
+  })
+
+  it('shows the typed point with the digits of the result', () => {
+    const [own] = ownOf(curveAt(straight, { x: '37 L', error: '10 percent' }))
+    expect(own?.own).toMatchObject({ value: 74, rounded: '74', significantFigures: 2 })
   })
 
   it('has gaps where the calculator refuses', () => {
@@ -102,9 +109,10 @@ describe('a curve over one input', () => {
       to: 90,
     })
     const curve = curveAt(changing, { x: '60 L' })
-    expect(curve.up.unit).toBe('mg')
-    for (const point of curve.points) expect(point.up).toBeCloseTo(point.across * 1000, 6)
-    const mixed = drawing((x) => ({ value: x, unit: x < 50 ? 'g' : 'mL' }), { from: 0, to: 90 })
+    expect(curve.up.unit).toBe('g')
+    for (const point of curve.points) expect(point.up).toBeCloseTo(point.across, 9)
+    expect(curveAt(changing, { x: '2 L' }).up.unit).toBe('mg')
+    const mixed = drawing((x) => ({ value: x, unit: x < 40 ? 'g' : 'mL' }), { from: 0, to: 90 })
     expect(curveAt(mixed, { x: '60 L' }).points.filter(({ up }) => up === null).length).toBeGreaterThan(3)
   })
 
@@ -210,6 +218,7 @@ describe('a curve over a plan', () => {
     const answer = evaluate(at('salinity-change'), bodyOf(given))
     const rows = answer.ok ? (answer.answer.schedule?.rows ?? []) : []
     expect(curve.points).toEqual(rows.map(([day, , to]) => ({ across: day, up: to })))
+    expect(curve.steps).toBe(true)
     expect(curve.across).toEqual({ word: 'column.day', unit: 'ratio', whole: true, scale: 'even' })
     expect(curve.up).toMatchObject({ word: 'column.to', unit: 'PSS-78' })
   })
