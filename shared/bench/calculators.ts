@@ -1,11 +1,22 @@
+import { ammoniaForms } from './calculators/ammonia-forms.ts'
+import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
+import { lengthWeight } from './calculators/length-weight.ts'
+import { medicatedFeed } from './calculators/medicated-feed.ts'
+import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
+import { specificGravity } from './calculators/specific-gravity.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
+import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
+import { waterChanges } from './calculators/water-changes.ts'
 import type { AnyCalculator } from './definition.ts'
 
 /** Every calculator of the bench, in the order in which the bench shows them. A new one is a file and a line here. */
@@ -13,11 +24,22 @@ export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
   injection,
+  unionisedAmmoniaCalculator,
+  specificGravity,
   tankVolume,
   washOut,
+  waterChanges,
   salinityChange,
   turnover,
+  medicatedFeed,
+  groupBiomassCalculator,
+  lengthWeight,
+  oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
+  barometricPressure,
   unitConversion,
+  ammoniaForms,
 ]
 
 const byId = new Map(calculators.map((each) => [each.id, each]))

@@ -124,6 +124,16 @@ export const sources = {
       'Garcia and Gordon 1992, Limnology and Oceanography 37, 1307–1312, eq. 8; coefficients from secondary copies',
     mark: 'V2',
   },
+  'gas-supersaturation': {
+    citation:
+      'Common practice of aquatic medicine, from memory: above 110 % of saturation gas bubble disease is looked for',
+    mark: 'M',
+  },
+  'conductivity-meters': {
+    citation:
+      'Common practice, from memory: conductivity meters compensate linearly, near 2 % per °C, to 25 °C or to 20 °C',
+    mark: 'M',
+  },
   'standard-atmosphere': {
     citation: 'ICAO and US Standard Atmosphere 1976, formula of the troposphere',
     mark: 'C',

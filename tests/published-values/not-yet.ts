@@ -3,13 +3,6 @@
  * calculator leaves it in the change that adds its runner.
  */
 export const notYet: readonly string[] = [
-  'unionized_ammonia_fraction',
-  'unionized_ammonia_concentration',
-  'ammonium_pKa_freshwater',
-  'unionized_ammonia_fraction_clegg_whitfield',
-  'nh3_from_nh3n',
-  'nh3n_from_nh3',
-  'nh4_from_nh4n',
   'allometric_dose_mg',
   'ct_mg_min_per_L',
   'ozone_dose_mg_per_L',

@@ -15,6 +15,7 @@ export const feedLimits = {
   mostDoseMgPerKg: 10_000,
   mostRatePercent: 100,
   mostBatchG: 1_000_000_000,
+  mostErrorPercent: 90,
 } as const
 
 export const biomassRules: NumberRules = {

@@ -49,3 +49,40 @@ export function groupBiomass(input: {
   const gainKg = feedGivenKg / feedConversion
   return ok({ biomassKg: weighedKg + gainKg, weighedKg, gainKg })
 }
+
+/** A group's weight with both ends of it. */
+export interface GroupBiomassRange extends GroupBiomass {
+  lowKg: number
+  highKg: number
+}
+
+/**
+ * A group's weight and what errors of the count and of the mean weight make of it: the widest range they can make together.
+ * The growth by feed has no error here, so the range is of the weighing alone.
+ *
+ * @param input.countErrorPercent      of the count, 0…90; an estimated count has a large one
+ * @param input.meanWeightErrorPercent of the mean weight, 0…90
+ * @returns kg; both ends are the weight itself where both errors are 0
+ * @refuses as groupBiomass · below-least, above-most (countErrorPercent, meanWeightErrorPercent)
+ * @source  both ends of each factor; held by its law
+ */
+export function groupBiomassRange(
+  input: Parameters<typeof groupBiomass>[0] & { countErrorPercent: number; meanWeightErrorPercent: number },
+): Result<GroupBiomassRange, FeedRefusal> {
+  const group = groupBiomass(input)
+  if (!group.ok) return group
+  const { countErrorPercent, meanWeightErrorPercent } = input
+  const error = { unit: 'percent', min: 0, max: feedLimits.mostErrorPercent } as const
+  const refused = checkNumbers([
+    [countErrorPercent, { ...error, field: 'countErrorPercent' }],
+    [meanWeightErrorPercent, { ...error, field: 'meanWeightErrorPercent' }],
+  ])
+  if (refused) return refused
+  const { weighedKg, gainKg } = group.value
+  const [count, mean] = [countErrorPercent / 100, meanWeightErrorPercent / 100]
+  return ok({
+    ...group.value,
+    lowKg: weighedKg * (1 - count) * (1 - mean) + gainKg,
+    highKg: weighedKg * (1 + count) * (1 + mean) + gainKg,
+  })
+}

@@ -1,6 +1,7 @@
 import { ok, type Result } from '../result.ts'
 import { checkGasWater } from './check-gas-water.ts'
 import type { GasRefusal } from './gas-refusal.ts'
+import { oxygenMgPerMl } from './oxygen-by-volume.ts'
 
 interface Fit {
   a: readonly number[]
@@ -19,8 +20,6 @@ const volumetric: Fit = {
   b: [-6.24523e-3, -7.37614e-3, -1.0341e-2, -8.17083e-3],
   c0: -4.88682e-7,
 }
-/** Milligrams of oxygen in a millilitre of it at 0 °C and one atmosphere. */
-const mgPerMl = 1.42905
 
 const series = (factors: readonly number[], ts: number): number =>
   factors.reduce((sum, factor, power) => sum + factor * ts ** power, 0)
@@ -32,6 +31,8 @@ export interface GarciaGordonOxygen {
   mlStpPerL: number
   /** mlStpPerL × 1.42905. */
   mgPerL: number
+  /** Ts, the scaled temperature, ln[(298.15 − t)/(273.15 + t)]. */
+  ts: number
 }
 
 /**
@@ -57,5 +58,5 @@ export function garciaGordonOxygen(input: {
   const by = ({ a, b, c0 }: Fit) =>
     Math.exp(series(a, ts) + salinityPss78 * series(b, ts) + c0 * salinityPss78 ** 2)
   const mlStpPerL = by(volumetric)
-  return ok({ umolPerKg: by(molar), mlStpPerL, mgPerL: mlStpPerL * mgPerMl })
+  return ok({ umolPerKg: by(molar), mlStpPerL, mgPerL: mlStpPerL * oxygenMgPerMl, ts })
 }

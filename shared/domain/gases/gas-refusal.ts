@@ -7,3 +7,5 @@ export type GasRefusal =
   | 'unknown-pressure-unit'
   /** The number is no air pressure in its unit, and would be one in another. */
   | 'pressure-looks-like-other-unit'
+  /** The reading makes a pressure by the sea that there is not. */
+  | 'pressure-not-of-altitude'

@@ -18,6 +18,8 @@ export interface WaterUnderAir {
 export interface OxygenSolubility {
   /** C₀ F_S F_P. */
   mgPerL: number
+  /** T, K. */
+  kelvin: number
   /** C₀: fresh water at one atmosphere. */
   freshWaterMgPerL: number
   /** F_S. */
@@ -43,6 +45,7 @@ export function oxygenSolubility(input: WaterUnderAir): Result<OxygenSolubility,
   if (!fresh.ok) return fresh
   return ok({
     mgPerL: fresh.value * salt.value * pressure.value.factor,
+    kelvin: input.temperatureC + 273.15,
     freshWaterMgPerL: fresh.value,
     salinityFactor: salt.value,
     pressure: pressure.value,

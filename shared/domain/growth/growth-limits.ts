@@ -3,7 +3,7 @@ import type { NumberRules } from '../units/check-number.ts'
 /**
  * Where length and weight are asked at all; beyond, a figure is taken for a slip.
  *
- * @source project-default: no animal of a collection is longer than 25 m or heavier than 20 t · exponents: froese-2006
+ * @source project-default: no animal of a collection is longer than 25 m or heavier than 20 t; usual a · exponents: froese-2006
  */
 export const growthLimits = {
   mostLengthCm: 2500,
@@ -14,6 +14,9 @@ export const growthLimits = {
   /** Outside of these an exponent is possible and worth a second look. */
   leastTypicalB: 2.5,
   mostTypicalB: 3.5,
+  /** Eels and pipefish are below, puffers and boxfish above; beyond, a table is in other units than it says. */
+  leastUsualA: 0.0005,
+  mostUsualA: 0.2,
 } as const
 
 export const lengthRules: NumberRules = {
@@ -40,4 +43,9 @@ export const bRules: NumberRules = {
 /** Whether an exponent is one that most species have, 2.5…3.5. @source froese-2006 */
 export function isTypicalExponent(b: number): boolean {
   return b >= growthLimits.leastTypicalB && b <= growthLimits.mostTypicalB
+}
+
+/** Whether a coefficient in g/cm^b is one that some fish has, 0.0005…0.2. @source project-default */
+export function isUsualCoefficient(aGPerCmB: number): boolean {
+  return aGPerCmB >= growthLimits.leastUsualA && aGPerCmB <= growthLimits.mostUsualA
 }

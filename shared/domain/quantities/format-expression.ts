@@ -22,11 +22,14 @@ const constants: Record<string, string> = { pi: '3.1416' }
 const functions: Record<string, string> = { asin: 'arcsin', log: 'ln', ceil: 'next whole of ' }
 const powers: Record<string, string> = { '^2': '²', '^3': '³' }
 const token =
-  /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d(?!\.))|(?<sign> [-+*/] )|(?<other>.)/gs
+  /(?<number>\d+(?:\.\d+)?(?:e[+-]?\d+)?)|(?<name>[A-Za-z_]\w*(?:\/[A-Za-z_]\w*)?)|(?<power>\^\d(?![\d.]))|(?<sign> [-+*/] )|(?<other>.)/gs
 const enteredDigits = 6
 const shortenedDigits = 4
 /** A single quantity in brackets, which only the arithmetic needs: "÷ (2,217.6 L)". */
 const needlessBrackets = /\((\d[\d.]*(?:e[+-]?\d+)? [A-Za-z_]\w*(?:\/\w+)?)\)(?!\^)/g
+
+/** A whole exponent in brackets: "^(4)". */
+const exponentBrackets = /\^\((\d+)\)/g
 
 /**
  * The arithmetic of a working line as people write it: `pi / 4 * (0.057 m)^2 * 14.2 m to L` becomes
@@ -42,6 +45,7 @@ export function formatExpression(expression: string, earlier?: ReadonlySet<strin
     .replace(/ to [^ ]+$/, '')
     .replaceAll('pi / 4', '0.7854')
     .replace(needlessBrackets, '$1')
+    .replace(exponentBrackets, '^$1')
   let text = ''
   for (const match of shown.matchAll(token)) {
     const { number, name, power, sign, other } = match.groups ?? {}

@@ -5,5 +5,6 @@
  * @param quotient finite, 0 or more
  */
 export function wholeSteps(quotient: number): number {
-  return Math.ceil(quotient - 1e-9 * Math.max(1, quotient))
+  // the largest of zero and a negative nothing is zero
+  return Math.max(0, Math.ceil(quotient - 1e-9 * Math.max(1, quotient)))
 }

@@ -9,10 +9,13 @@ import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { bodyOf, emptyDraft, exampleDraft, isUntouched } from './bench-draft.ts'
+import type { Draft } from './bench-draft.ts'
+import { EnclosureField } from './enclosure-field.tsx'
 import { InputFields } from './input-fields.tsx'
 import { BenchPlot } from './plot.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
+import { useEnclosureWater } from './use-enclosure-water.ts'
 
 /** One calculator: its fields, and the figure as one types, by the same code that the server answers with. */
 export function CalculatorSheet({ of }: { of: AnyCalculator }) {
@@ -21,7 +24,12 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   const evaluation = useMemo(() => evaluate(of, body), [of, body])
   // the curve asks the calculator dozens of times: it follows once the figure stands
   const drawnBody = useDeferredValue(body)
+  const water = useEnclosureWater(of, setDraft)
   const untouched = isUntouched(draft)
+  const startAgain = (next: Draft) => {
+    water.forget()
+    setDraft(next)
+  }
   const filled = (name: string) => {
     const given = draft[name]
     return typeof given === 'object' ? given.value.trim() !== '' : given !== undefined && given !== ''
@@ -43,17 +51,24 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
         <div className="pane stack">
           <p className="t-2">{words.decisionSupport}</p>
           <div className="row row-wrap">
-            <Button size="small" onClick={() => setDraft(exampleDraft(of))}>
+            <Button size="small" onClick={() => startAgain(exampleDraft(of))}>
               {words.example}
             </Button>
-            <Button size="small" kind="plain" onClick={() => setDraft(emptyDraft(of, rememberedUnits()))}>
+            <Button size="small" kind="plain" onClick={() => startAgain(emptyDraft(of, rememberedUnits()))}>
               {words.clear}
             </Button>
           </div>
         </div>
       </Area>
       <Area className="pane stack">
-        <InputFields of={of} draft={draft} onChange={setDraft} wrong={wrong} />
+        <EnclosureField of={of} water={water} />
+        <InputFields
+          of={of}
+          draft={draft}
+          onChange={setDraft}
+          wrong={wrong}
+          noteOf={(name) => water.note(name, draft[name])}
+        />
       </Area>
       <Area className="bench-result">
         <section className="net-volume" aria-live="polite" aria-label={words.result}>

@@ -9,6 +9,8 @@ import { QuantityField } from '../../ui/quantity-field.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { askedInputs, fittingUnits, unitKey } from './bench-draft.ts'
 import type { Draft } from './bench-draft.ts'
+import { FillNote, TakeFigure } from './enclosure-field.tsx'
+import type { FieldNote } from './enclosure-figures.ts'
 import { rememberUnit } from './remembered-units.ts'
 
 const fewOptions = 2
@@ -20,11 +22,14 @@ export function InputFields({
   draft,
   onChange,
   wrong,
+  noteOf,
 }: {
   of: AnyCalculator
   draft: Draft
   onChange: (next: Draft) => void
   wrong: (name: string) => string | undefined
+  /** What an enclosure says for a field. */
+  noteOf: (name: string) => FieldNote | undefined
 }) {
   return askedInputs(of, draft).map((name) => {
     const input = of.inputs[name]
@@ -45,10 +50,11 @@ export function InputFields({
           onChange={(next) => onChange({ ...draft, [name]: next })}
         />
       )
-    return (
+    const note = noteOf(name)
+    const field = (
       <QuantityField
-        key={name}
         {...common}
+        hint={note ? <HintWithNote hint={common.hint} note={note} /> : common.hint}
         name={name}
         allowNegative={mayBeNegative(input)}
         units={input.units.map((unit) => ({ unit, label: unitOf(unit).symbol }))}
@@ -59,8 +65,30 @@ export function InputFields({
         }}
       />
     )
+    return (
+      <div key={name}>
+        {field}
+        {note?.take ? (
+          <TakeFigure
+            field={common.label}
+            take={note.take}
+            onTake={() => {
+              const { value = '', unit = '' } = note.take ?? {}
+              onChange({ ...draft, [name]: { value, unit } })
+            }}
+          />
+        ) : null}
+      </div>
+    )
   })
 }
+
+const HintWithNote = ({ hint, note }: { hint: string | undefined; note: FieldNote }) => (
+  <>
+    {hint ? `${hint} ` : null}
+    <FillNote note={note} />
+  </>
+)
 
 const mayBeNegative = ({ limits }: QuantityInput) =>
   limits?.above === undefined && (limits?.min === undefined || limits.min < 0)

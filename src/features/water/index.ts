@@ -1,6 +1,8 @@
 export { EnclosureSheet } from './enclosure-sheet.tsx'
+export { netVolumeText } from './net-volume.tsx'
 export { ReadingForm } from './reading-form.tsx'
 export { ReadingList } from './reading-list.tsx'
+export { readingText } from './reading-text.ts'
 export { VolumeForm } from './volume-form.tsx'
 export { VolumeList } from './volume-list.tsx'
 export { WaterList } from './water-list.tsx'

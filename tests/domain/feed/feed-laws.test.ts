@@ -2,9 +2,9 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { drugInFeed } from '../../../shared/domain/feed/drug-in-feed.ts'
 import { gelBatchDays, gelBatchDrug } from '../../../shared/domain/feed/gel-batch.ts'
-import { groupBiomass } from '../../../shared/domain/feed/group-biomass.ts'
+import { groupBiomass, groupBiomassRange } from '../../../shared/domain/feed/group-biomass.ts'
 import { drugPerDay, feedPerDay } from '../../../shared/domain/feed/per-day.ts'
-import { premixKgPerTonne } from '../../../shared/domain/feed/premix.ts'
+import { premixForBatch, premixKgPerTonne } from '../../../shared/domain/feed/premix.ts'
 import { between, expectNear, expectTotal, refusalOf, valueOf } from '../../support/engine-laws.ts'
 
 const days = fc.record({
@@ -36,6 +36,18 @@ describe('laws of medicated feed', () => {
       fc.property(between(1, 10_000), between(1, 100), (targetGPerTonne, premixPercentWw) => {
         const kilograms = valueOf(premixKgPerTonne({ targetGPerTonne, premixPercentWw }))
         expectNear((kilograms * 1000 * premixPercentWw) / 100, targetGPerTonne)
+      }),
+    )
+  })
+
+  it('the premix in a batch holds what the batch is to hold, and a tonne takes what a tonne takes', () => {
+    const strengths = fc.record({ targetGPerTonne: between(1, 10_000), premixPercentWw: between(1, 100) })
+    fc.assert(
+      fc.property(strengths, between(1, 1_000_000), (strength, batchG) => {
+        const grams = valueOf(premixForBatch({ ...strength, batchG }))
+        expectNear(grams * (strength.premixPercentWw / 100) * 1e6, strength.targetGPerTonne * batchG)
+        const tonne = valueOf(premixForBatch({ ...strength, batchG: 1_000_000 }))
+        expectNear(tonne, valueOf(premixKgPerTonne(strength)) * 1000)
       }),
     )
   })
@@ -78,6 +90,28 @@ describe('laws of medicated feed', () => {
     )
   })
 
+  it('lies within its range, which is one figure without errors and wider with larger ones', () => {
+    const group = fc.record({
+      count: fc.integer({ min: 1, max: 100_000 }),
+      meanWeightG: between(0.1, 10_000),
+      feedGivenKg: between(0, 1000),
+      feedConversion: between(0.5, 5),
+    })
+    fc.assert(
+      fc.property(group, between(0.1, 40), between(0.1, 40), (given, count, mean) => {
+        const { biomassKg, gainKg } = valueOf(groupBiomass(given))
+        const range = (countErrorPercent: number, meanWeightErrorPercent: number) =>
+          valueOf(groupBiomassRange({ ...given, countErrorPercent, meanWeightErrorPercent }))
+        expect(range(0, 0)).toMatchObject({ lowKg: biomassKg, highKg: biomassKg })
+        const { lowKg, highKg } = range(count, mean)
+        expect(lowKg).toBeLessThan(biomassKg)
+        expect(highKg).toBeGreaterThan(biomassKg)
+        expect(lowKg).toBeGreaterThanOrEqual(gainKg)
+        expect(range(2 * count, mean).highKg).toBeGreaterThan(highKg)
+      }),
+    )
+  })
+
   it('takes a conversion of 1.5 as kilograms of feed for one of growth', () => {
     const grown = groupBiomass({ count: 5000, meanWeightG: 10, feedGivenKg: 60, feedConversion: 1.5 })
     expect(valueOf(grown)).toEqual({ biomassKg: 90, weighedKg: 50, gainKg: 40 })
@@ -100,10 +134,18 @@ describe('laws of medicated feed', () => {
   it('answers nonsense with a refusal or a finite number', () => {
     expectTotal([
       [groupBiomass, ['count', 'meanWeightG', 'feedGivenKg', 'feedConversion']],
+      [
+        groupBiomassRange,
+        [
+          ...['count', 'meanWeightG', 'feedGivenKg', 'feedConversion'],
+          ...['countErrorPercent', 'meanWeightErrorPercent'],
+        ],
+      ],
       [drugPerDay, ['biomassKg', 'doseMgPerKg']],
       [feedPerDay, ['biomassKg', 'feedingRatePercentBw']],
       [drugInFeed, ['doseMgPerKg', 'feedingRatePercentBw']],
       [premixKgPerTonne, ['targetGPerTonne', 'premixPercentWw']],
+      [premixForBatch, ['targetGPerTonne', 'premixPercentWw', 'batchG']],
       [gelBatchDrug, ['doseMgPerKg', 'feedingRatePercentBw', 'batchG']],
       [gelBatchDays, ['batchG', 'feedingRatePercentBw', 'biomassKg']],
     ])

@@ -3,11 +3,13 @@ import { describe, expect, it } from 'vitest'
 import { roundInjection } from '../../../shared/domain/injection/injection-volume.ts'
 import { wholeSteps } from '../../../shared/domain/units/whole-steps.ts'
 import { changesNeeded, singleChangeFraction } from '../../../shared/domain/water/flow/changes-needed.ts'
-import { repeatDoseSteadyState } from '../../../shared/domain/water/flow/losses.ts'
+import { dripRate, primingVolume } from '../../../shared/domain/water/flow/drip-rate.ts'
+import { concentrationAfterLoss, repeatDoseSteadyState } from '../../../shared/domain/water/flow/losses.ts'
 import { minutesToFraction } from '../../../shared/domain/water/flow/wash-out.ts'
 import { wellMixedConcentration } from '../../../shared/domain/water/flow/well-mixed-concentration.ts'
 import { remainingAfterChanges } from '../../../shared/domain/water/remaining-after-changes.ts'
 import { stepwiseSchedule } from '../../../shared/domain/water/salinity-change/stepwise.ts'
+import { continuousExchangeLitres } from '../../../shared/domain/water/salinity-change/swap.ts'
 import type { Result } from '../../../shared/domain/result.ts'
 
 const valueOf = <T>(result: Result<T>): T => {
@@ -81,6 +83,22 @@ describe('a well-mixed tank', () => {
   })
 })
 
+describe('what is too small to divide by', () => {
+  it('is refused by its name, and asks for no time where nothing is to be washed out', () => {
+    const barely = { volumeLitres: 1000, flowLPerMin: 1e-320 }
+    expect(minutesToFraction({ ...barely, fraction: 0.5 })).toMatchObject({
+      ok: false,
+      refusal: { code: 'not-finite', field: 'flowLPerMin' },
+    })
+    expect(valueOf(minutesToFraction({ ...barely, fraction: 1 }))).toBe(0)
+    const drop = { initialMgPerL: 1, inflowMgPerL: 0, flowLPerMin: 1, lossPerMin: 0, minutes: 1 }
+    expect(wellMixedConcentration({ ...drop, volumeLitres: 1e-320 })).toMatchObject({
+      ok: false,
+      refusal: { code: 'not-finite', field: 'volumeLitres' },
+    })
+  })
+})
+
 describe('water changes', () => {
   it('are as many as it takes, and one fewer is not enough', () => {
     fc.assert(
@@ -110,6 +128,22 @@ describe('water changes', () => {
       }),
     )
     expect([0.3 / 0.1, 3, 2.4, 3.001].map(wholeSteps)).toEqual([3, 3, 3, 4])
+  })
+  it('are one when all of it is changed, however little of the new water is wanted, and none at the start', () => {
+    const whole = { initialMgPerL: 80, replacementMgPerL: 5, changeFraction: 1 }
+    for (const targetMgPerL of [5, 20, 79.9])
+      expect(valueOf(changesNeeded({ ...whole, targetMgPerL }))).toBe(1)
+    expect(valueOf(singleChangeFraction({ ...whole, targetMgPerL: 5 }))).toBe(1)
+    for (const changeFraction of [1e-17, 0.3, 1])
+      expect(valueOf(changesNeeded({ ...whole, targetMgPerL: 80, changeFraction }))).toBe(0)
+    const less = changesNeeded({ ...whole, targetMgPerL: 5, changeFraction: 0.999_999 })
+    expect(less).toMatchObject({ ok: false, refusal: { code: 'target-beyond-replacement' } })
+    const more = changesNeeded({ ...whole, targetMgPerL: 20, changeFraction: 1.000_001 })
+    expect(more).toMatchObject({ ok: false, refusal: { code: 'above-most', field: 'changeFraction' } })
+  })
+  it('are counted also where one of them is less than the last binary digit of all', () => {
+    const input = { initialMgPerL: 80, targetMgPerL: 20, replacementMgPerL: 0, changeFraction: 1e-17 }
+    expect(valueOf(changesNeeded(input)) / (Math.log(4) / 1e-17)).toBeCloseTo(1, 8)
   })
   it('bring the salinity down the plan to its end, salt accounted for', () => {
     fc.assert(
@@ -188,7 +222,10 @@ const nonsense = [
   -Infinity,
   -1,
   0,
+  1,
   1e308,
+  1e-17,
+  1e-320,
   5e-324,
   undefined,
   null,
@@ -212,7 +249,23 @@ describe('nonsense', () => {
           }),
           minutesToFraction({ fraction: a, volumeLitres: b, flowLPerMin: c }),
           changesNeeded({ initialMgPerL: a, targetMgPerL: b, replacementMgPerL: c, changeFraction: d }),
+          singleChangeFraction({ initialMgPerL: a, targetMgPerL: b, replacementMgPerL: c }),
+          remainingAfterChanges({
+            initialMgPerL: a,
+            replacementMgPerL: b,
+            changeFraction: c,
+            changes: d,
+          }),
           repeatDoseSteadyState({ doseMgPerL: a, changeFraction: b, lossPerHour: c, intervalHours: d }),
+          concentrationAfterLoss({ initialMgPerL: a, halfLifeHours: b, hours: c }),
+          dripRate({ inflowLPerMin: a, targetMgPerL: b, stockMgPerMl: c }),
+          primingVolume({ volumeLitres: a, targetMgPerL: b, stockMgPerMl: c }),
+          continuousExchangeLitres({
+            startSalinity: a,
+            targetSalinity: b,
+            replacementSalinity: c,
+            volumeLitres: d,
+          }),
           stepwiseSchedule({
             startSalinity: a,
             targetSalinity: b,
@@ -224,12 +277,14 @@ describe('nonsense', () => {
         ]
         for (const answer of answers) {
           const text = JSON.stringify(answer, (_, value: unknown) =>
-            typeof value === 'number' && !Number.isFinite(value) ? 'not finite' : value,
+            typeof value === 'number' && (!Number.isFinite(value) || Object.is(value, -0))
+              ? 'no figure'
+              : value,
           )
-          expect(text).not.toContain('not finite')
+          if (text.includes('no figure')) expect({ a, b, c, d, text }).toBe('a figure')
         }
       }),
-      { numRuns: 1000 },
+      { numRuns: 4000 },
     )
   })
 })

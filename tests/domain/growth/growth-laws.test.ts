@@ -8,7 +8,7 @@ import {
   conditionFactorFromEnglish,
   fultonConditionFactor,
 } from '../../../shared/domain/growth/condition-factor.ts'
-import { isTypicalExponent } from '../../../shared/domain/growth/growth-limits.ts'
+import { isTypicalExponent, isUsualCoefficient } from '../../../shared/domain/growth/growth-limits.ts'
 import {
   lengthFromWeight,
   relativeCondition,
@@ -110,6 +110,8 @@ describe('laws of length and weight', () => {
     const withB = (b: number) => refusalOf(weightFromLength({ aGPerCmB: 0.01, b, lengthCm: 20, ...total }))[0]
     expect([1.99, 2, 4, 4.01].map(withB)).toEqual(['below-least', 'answered', 'answered', 'above-most'])
     expect([2.49, 2.5, 3.5, 3.51].map(isTypicalExponent)).toEqual([false, true, true, false])
+    // a trout's 0.01 printed in millimetres is a thousandth of it
+    expect([0.01, 0.00001, 10].map(isUsualCoefficient)).toEqual([true, false, false])
   })
 
   it('refuses a unit that is none of mass or length', () => {

@@ -202,6 +202,10 @@ describe('working', () => {
     ['1958.4 L - 41 L + 264 L to L', '1,958.4~L~\u2212 41~L~+ 264~L'],
     ['25000 gal / (400 gal/minute) to minute', '25,000~US gal~÷ 400~US gal/min'],
     ['pi * (0.5 m)^2 * 1e-7 m to L', '3.1416~× (0.5~m)²~× 0.0000001~m'],
+    ['80 mg/L * (1 - 30 / 100)^(4)', '80~mg/L~× (1~− 30~÷ 100)^4'],
+    ['100 * (1 - 30 / 100)^(25)', '100~× (1~− 30~÷ 100)^25'],
+    ['100 * (1 - 30 / 100)^(2)', '100~× (1~− 30~÷ 100)²'],
+    ['2^(-30 hour / (12 hour)) * 100', '2^(−30~h~÷ 12~h)~× 100'],
   ])('%s is written %s', (expression, expected) => {
     expect(seen(formatExpression(expression))).toBe(expected)
   })

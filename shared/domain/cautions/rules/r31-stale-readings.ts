@@ -4,24 +4,27 @@ import { freshReading } from '../fresh-reading.ts'
 import type { ReadingName } from '../reading-name.ts'
 import { readingFact, readingFacts, requiredReadings } from '../required-readings.ts'
 
+/** How old each reading may be when a dose begins. */
+export const readingAgeLimits = {
+  oxygenMinutes: { default: 30, unit: 'min', source: 'project-default', mark: 'P', tighter: 'lower' },
+  temperatureAndPhHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
+  alkalinityAndHardnessHours: {
+    default: 24,
+    unit: 'h',
+    source: 'project-default',
+    mark: 'P',
+    tighter: 'lower',
+  },
+  copperHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
+} as const
+
 /** The water tests that the agent asks for have to be fresh when the dose begins. */
 export const staleReadings = defineRule({
   id: 'R31',
   levels: ['stop'],
   when: 'start',
   overridable: true,
-  parameters: {
-    oxygenMinutes: { default: 30, unit: 'min', source: 'project-default', mark: 'P', tighter: 'lower' },
-    temperatureAndPhHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
-    alkalinityAndHardnessHours: {
-      default: 24,
-      unit: 'h',
-      source: 'project-default',
-      mark: 'P',
-      tighter: 'lower',
-    },
-    copperHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
-  },
+  parameters: readingAgeLimits,
   uses: [
     'water.kind',
     'water.oxygenMgPerL',

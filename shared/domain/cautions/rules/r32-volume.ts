@@ -8,6 +8,15 @@ import { readingOf } from '../caution-param.ts'
 
 const narrowMargin: readonly AgentCode[] = ['formalin', 'copper-sulfate', 'tricaine']
 
+/** How old a determination of a volume may be, in calendar months. */
+export const volumeAgeLimit = {
+  default: 12,
+  unit: 'count',
+  source: 'project-default',
+  mark: 'P',
+  tighter: 'lower',
+} as const
+
 /** An error of the volume is an error of the dose. */
 export const volume = defineRule({
   id: 'R32',
@@ -15,7 +24,7 @@ export const volume = defineRule({
   when: 'both',
   overridable: true,
   parameters: {
-    maxAgeMonths: { default: 12, unit: 'count', source: 'project-default', mark: 'P', tighter: 'lower' },
+    maxAgeMonths: volumeAgeLimit,
     maxErrorPercent: { default: 10, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
     stopErrorPercent: {
       default: 50,
@@ -55,7 +64,7 @@ export const volume = defineRule({
     // A meter and a dilution see only the water, so nothing has to be taken off.
     if (!displacementSubtracted && (method === 'geometry' || method === 'estimated'))
       found.push({ ...base, code: 'volume-gross', params: { determinedOn } })
-    if (facilityDateOf(facts.at, facts.zone) > addMonths(determinedOn, maxAgeMonths))
+    if (isVolumeOld(determinedOn, facilityDateOf(facts.at, facts.zone), maxAgeMonths))
       found.push({ ...base, code: 'volume-old', params: { determinedOn, limitMonths: maxAgeMonths } })
     if (method === 'estimated' && errorPercent === null)
       found.push({
@@ -86,6 +95,17 @@ export const volume = defineRule({
     return found
   },
 })
+
+/**
+ * Whether a determination of a volume is older than it may be.
+ *
+ * @param determinedOn facility date of the measurement
+ * @param today        facility date
+ * @param maxAgeMonths whole calendar months; of exactly that age it still counts
+ */
+export function isVolumeOld(determinedOn: string, today: string, maxAgeMonths: number): boolean {
+  return today > addMonths(determinedOn, maxAgeMonths)
+}
 
 /** The same day so many months later; as text to compare with, so that 31 + 1 month need not exist. */
 function addMonths(date: string, months: number): string {

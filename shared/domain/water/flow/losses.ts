@@ -8,6 +8,23 @@ type LossRefusal = LimitRefusal | 'not-finite'
 const hours = (field: string) => ({ field, unit: 'h', min: 0, max: 1_000_000 }) as const
 
 /**
+ * The share that a loss of first order leaves in a time: 2^(−t ÷ half-life).
+ *
+ * @param input.halfLifeHours above 0, at most 1,000,000
+ * @param input.hours         0…1,000,000
+ * @returns a fraction, 0…1; 0 after so many half-lives that nothing is left to count
+ * @refuses not-finite · below-least, above-most · not-above-zero (half-life)
+ * @source  stirred-tank · check value decay.01
+ */
+export function shareKept(input: { halfLifeHours: number; hours: number }): Result<number, LossRefusal> {
+  const refused = checkNumbers([
+    [input.halfLifeHours, { field: 'halfLifeHours', unit: 'h', above: 0, max: 1_000_000 }],
+    [input.hours, hours('hours')],
+  ])
+  return refused ?? ok(2 ** (-input.hours / input.halfLifeHours))
+}
+
+/**
  * What a loss of first order has left: C0 × 2^(−t ÷ half-life).
  *
  * @returns mg/L
@@ -19,12 +36,10 @@ export function concentrationAfterLoss(input: {
   halfLifeHours: number
   hours: number
 }): Result<number, LossRefusal> {
-  const refused = checkNumbers([
-    [input.initialMgPerL, concentrationRules('initialMgPerL')],
-    [input.halfLifeHours, { field: 'halfLifeHours', unit: 'h', above: 0, max: 1_000_000 }],
-    [input.hours, hours('hours')],
-  ])
-  return refused ?? ok(input.initialMgPerL * 2 ** (-input.hours / input.halfLifeHours))
+  const refused = checkNumbers([[input.initialMgPerL, concentrationRules('initialMgPerL')]])
+  if (refused) return refused
+  const kept = shareKept(input)
+  return kept.ok ? ok(input.initialMgPerL * kept.value) : kept
 }
 
 /**

@@ -1,6 +1,7 @@
 import { ok, type Result } from '../../result.ts'
 import { checkNumbers } from '../../units/check-numbers.ts'
 import { checkNumber } from '../../units/check-number.ts'
+import { finiteOrRefuse } from '../../units/finite-or-refuse.ts'
 import type { LimitRefusal } from '../../units/number-refusal.ts'
 import { volumeRules } from './flow-limits.ts'
 
@@ -26,7 +27,7 @@ export function turnoversToFraction(fraction: number): Result<number, FlowRefusa
  * a lower bound, which a test confirms.
  *
  * @returns minutes
- * @refuses not-finite · not-above-zero (volume, flow, fraction) · above-most
+ * @refuses not-finite (flowLPerMin, where the time is beyond any number) · not-above-zero (volume, flow, fraction) · above-most
  * @source  stirred-tank · check value wash.05
  */
 export function minutesToFraction(input: {
@@ -40,7 +41,8 @@ export function minutesToFraction(input: {
     [volumeLitres, volumeRules('volumeLitres')],
     [flowLPerMin, { ...volumeRules('flowLPerMin'), unit: 'L/min' }],
   ])
-  return refused ?? ok((volumeLitres / flowLPerMin) * (0 - Math.log(fraction)))
+  if (refused) return refused
+  return finiteOrRefuse((volumeLitres * (0 - Math.log(fraction))) / flowLPerMin, 'flowLPerMin')
 }
 
 /**
@@ -53,5 +55,6 @@ export function minutesToFraction(input: {
  */
 export function percentReplaced(turnovers: number): Result<number, FlowRefusal> {
   const checked = checkNumber(turnovers, { field: 'turnovers', unit: 'ratio', min: 0, max: 1_000_000 })
-  return checked.ok ? ok(100 * (1 - Math.exp(-turnovers))) : checked
+  // of few turnovers 1 − e^−n keeps no digits when it is taken in two steps
+  return checked.ok ? ok(100 * (0 - Math.expm1(-turnovers))) : checked
 }

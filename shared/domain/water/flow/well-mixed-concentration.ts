@@ -1,5 +1,6 @@
 import { ok, type Result } from '../../result.ts'
 import { checkNumbers } from '../../units/check-numbers.ts'
+import { finiteOrRefuse } from '../../units/finite-or-refuse.ts'
 import type { LimitRefusal } from '../../units/number-refusal.ts'
 import { concentrationRules, flowRules, timeRules, volumeRules } from './flow-limits.ts'
 
@@ -9,7 +10,8 @@ import { concentrationRules, flowRules, timeRules, volumeRules } from './flow-li
  *
  * @param input.lossPerMin k, 0…1,000 per minute
  * @returns mg/L, between the concentrations of water and inflow, or below them where there is loss
- * @refuses not-finite · not-above-zero (volume) · below-least, above-most
+ * @refuses not-finite (volumeLitres, where the exchange is beyond any number) · not-above-zero (volume) · below-least,
+ *          above-most
  * @source  stirred-tank · check values flow.01 to flow.06, against an ODE solver
  */
 export function wellMixedConcentration(input: {
@@ -30,7 +32,9 @@ export function wellMixedConcentration(input: {
     [minutes, timeRules('minutes')],
   ])
   if (refused) return refused
-  const exchange = flowLPerMin / volumeLitres
+  const exchanges = finiteOrRefuse(flowLPerMin / volumeLitres, 'volumeLitres')
+  if (!exchanges.ok) return exchanges
+  const exchange = exchanges.value
   const rate = exchange + lossPerMin
   if (rate === 0) return ok(initialMgPerL)
   const steady = (exchange / rate) * inflowMgPerL

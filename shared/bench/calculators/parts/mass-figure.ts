@@ -1,0 +1,12 @@
+import { convert } from '../../../domain/units/convert.ts'
+import type { Figure } from '../../definition.ts'
+
+const gramsPerKilogram = 1000
+
+/** Something to weigh: in grams, from a kilogram on in kilograms. */
+export function massFigure(key: string, grams: number): Figure {
+  const kilograms = convert(grams, 'g', 'kg')
+  return grams >= gramsPerKilogram && kilograms.ok
+    ? { key, value: kilograms.value, unit: 'kg' }
+    : { key, value: grams, unit: 'g' }
+}
