@@ -25,18 +25,18 @@ const curveFor = (body: object) => {
   if (!curve) throw new Error('no curve')
   return curve
 }
-const made = (points: readonly [number, number | null][], more: Partial<Curve> = {}): Curve => ({
+/** A curve through these, evenly from 0 to `to`. */
+const made = (to: number, ups: readonly (number | null)[]): Curve => ({
   across: { word: 'input.elapsed', unit: 'min', scale: 'even' },
   up: { word: 'result.left', unit: 'mg/L', scale: 'even' },
-  points: points.map(([across, up]) => ({ across, up })),
-  ...more,
+  points: ups.map((up, i) => ({ across: (to * i) / (ups.length - 1), up })),
 })
 const places = (run: string | undefined) =>
   (run ?? '').split(' ').map((pair) => pair.split(',').map(Number) as [number, number])
 
 describe('the drawing of a curve', () => {
   it('puts later to the right and more higher, inside its frame', () => {
-    const { runs, plot } = layOutCurve(made([[0, 1], [5, 2], [10, 8]]), 400, 232) // prettier-ignore
+    const { runs, plot } = layOutCurve(made(10, [1, 2, 8]), 400, 232)
     const line = places(runs[0])
     expect(line.map(([x]) => x)).toEqual([plot.left, (plot.left + plot.right) / 2, plot.right])
     const ys = line.map(([, y]) => y)
@@ -46,10 +46,10 @@ describe('the drawing of a curve', () => {
   })
 
   it('marks both axes at round figures', () => {
-    const { acrossTicks, upTicks } = layOutCurve(made([[0, 0], [480, 9.7]]), 400, 232) // prettier-ignore
+    const { acrossTicks, upTicks } = layOutCurve(made(480, [0, 9.7]), 400, 232)
     expect(acrossTicks.map(({ text }) => text)).toEqual(['0', '100', '200', '300', '400'])
     expect(upTicks.map(({ text }) => text)).toEqual(['0.0', '2.5', '5.0', '7.5', '10.0'])
-    const narrow = layOutCurve(made([[0, 6.52], [1, 6.58]]), 250, 232) // prettier-ignore
+    const narrow = layOutCurve(made(1, [6.52, 6.58]), 250, 232)
     expect(narrow.upTicks.map(({ text }) => text)).toEqual(['6.52', '6.54', '6.56', '6.58'])
   })
 
@@ -62,18 +62,14 @@ describe('the drawing of a curve', () => {
   })
 
   it('draws a level line in the middle', () => {
-    const { runs, plot } = layOutCurve(made([[0, 7], [10, 7]]), 400, 232) // prettier-ignore
+    const { runs, plot } = layOutCurve(made(10, [7, 7]), 400, 232)
     const [, y] = places(runs[0])[0] ?? [0, 0]
     expect(Math.abs(y - (plot.top + plot.bottom) / 2)).toBeLessThan(20)
-    expect(layOutCurve(made([[0, 0], [10, 0]]), 400, 232).runs[0]).not.toMatch(/NaN/) // prettier-ignore
+    expect(layOutCurve(made(10, [0, 0]), 400, 232).runs[0]).not.toMatch(/NaN/)
   })
 
   it('breaks the line at a gap and shows an answer that stands alone as a point', () => {
-    const { runs, dots } = layOutCurve(
-      made([[0, 1], [1, 2], [2, null], [3, 4], [4, null], [5, 6], [6, 7]]), // prettier-ignore
-      400,
-      232,
-    )
+    const { runs, dots } = layOutCurve(made(6, [1, 2, null, 4, null, 6, 7]), 400, 232)
     expect(runs).toHaveLength(2)
     expect(dots).toHaveLength(1)
   })
