@@ -4,7 +4,9 @@ import { bathDose } from './calculators/bath-dose.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
+import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
@@ -13,6 +15,7 @@ import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
+import { seawaterDensity } from './calculators/seawater-density.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
@@ -29,6 +32,7 @@ export const calculators: readonly AnyCalculator[] = [
   makeUpDose,
   concentrationReached,
   stockSolution,
+  flowThroughBath,
   injection,
   unionisedAmmoniaCalculator,
   specificGravity,
@@ -43,6 +47,8 @@ export const calculators: readonly AnyCalculator[] = [
   oxygenSaturation,
   salinityFromConductivity,
   conductivityFromSalinity,
+  seawaterDensity,
+  freezingPoint,
   barometricPressure,
   unitConversion,
   ammoniaForms,

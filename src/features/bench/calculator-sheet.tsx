@@ -14,6 +14,7 @@ import { CarryPane } from './carry-pane.tsx'
 import { EnclosureField } from './enclosure-field.tsx'
 import { InputFields } from './input-fields.tsx'
 import { BenchPlot } from './plot.tsx'
+import { PrintButton } from './print-button.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
@@ -97,6 +98,7 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
             <ResultGrounds of={of} answer={evaluation.answer}>
               <BenchPlot of={of} body={drawnBody} />
             </ResultGrounds>
+            <PrintButton of={of} draft={draft} />
             <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
           </div>
         ) : null}

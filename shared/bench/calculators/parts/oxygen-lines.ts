@@ -20,7 +20,6 @@ export const oxygenLineWords = {
   'line.first-standard': 'At one atmosphere',
   'line.second-ts': 'Second equation: scaled temperature',
   'line.second': 'Second equation, Garcia and Gordon, at one atmosphere',
-  'line.difference': 'The first less the second',
 } as const
 
 /** Benson and Krause, step by step: ends in the line `saturation`. */
@@ -76,7 +75,8 @@ export function saturationLines(
 }
 
 /**
- * The second equation beside the first, and how far apart they are.
+ * The second equation beside the first. How far apart they are is no line: two figures so near each other leave a
+ * difference that no second evaluation bears out to nine digits.
  *
  * @param first the first equation at one atmosphere
  */
@@ -104,13 +104,6 @@ export function secondEquationLines(
       second.mgPerL,
       'mg/L',
       ['second-ts'],
-    ),
-    line(
-      'difference',
-      `${valueTerm(first.mgPerL, 'mg/L')} - ${valueTerm(second.mgPerL, 'mg/L')} to mg/L`,
-      first.mgPerL - second.mgPerL,
-      'mg/L',
-      ['first-standard', 'second'],
     ),
   ]
 }
