@@ -13,6 +13,7 @@ import type { Draft } from './bench-draft.ts'
 import { CarryPane } from './carry-pane.tsx'
 import { EnclosureField } from './enclosure-field.tsx'
 import { InputFields } from './input-fields.tsx'
+import { PrintButton } from './print-button.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
@@ -91,6 +92,7 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
         {evaluation.ok ? (
           <div className="pane stack">
             <ResultGrounds of={of} answer={evaluation.answer} />
+            <PrintButton of={of} draft={draft} />
             <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
           </div>
         ) : null}
