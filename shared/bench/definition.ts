@@ -104,7 +104,7 @@ export interface Calculator<
   weekly?: true
   /**
    * name · purpose · input.<name> · help.<name> · option.<name>.<option> · result.<key> · line.<code> · column.<key> ·
-   * caution.<code> · refusal.<code> · formula
+   * caution.<code> · refusal.<code> · formula · axis.<key of another word> where that one is too short on a curve
    */
   words: Messages
   inputs: Inputs

@@ -1,9 +1,12 @@
+import { readFileSync } from 'node:fs'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { anEnclosure } from '../builders/a-water.ts'
 import { aBathWater, readingsNow } from '../builders/an-order.ts'
+import { textOf } from '../pdf/support/poppler.ts'
 import { launchChromium } from '../support/chromium.ts'
-import { choose, deskSize, expectSound, openSignedIn, phoneSize } from '../support/journey.ts'
+import type { SessionOptions } from '../support/chromium.ts'
+import { choose, deskSize, expectSound, openSignedIn, phoneSize, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
 
@@ -25,7 +28,7 @@ afterAll(async () => {
   await app.stop()
 })
 
-const signedIn = (who: string, size: typeof deskSize, at: string): Promise<Page> =>
+const signedIn = (who: string, size: SessionOptions, at: string): Promise<Page> =>
   openSignedIn(browser, app, who, at, size)
 const field = (page: Page, name: string) => page.getByRole('textbox', { name: new RegExp(`^${name}`) })
 const enclosure = 'Figures from an enclosure'
@@ -164,7 +167,7 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     await button(page, 'Use as a reading of salinity').click()
     await page.waitForURL(/\/measure$/)
     await fromBench(page)
-      .getByText(/worked out, not measured/)
+      .getByText(/worked out, not measured.*Set the time to when the water was measured/)
       .waitFor()
     const salinity = page.getByRole('textbox', { name: /^Salinity/ })
     const figure = await salinity.inputValue()
@@ -177,6 +180,30 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     expect(body.rows).toHaveLength(1)
     expect(body.rows[0]).toMatchObject({ parameter: 'salinity', value: { value: figure, unit: 'PSS-78' } })
     expect(body.rows[0].note).toMatch(/^From the bench: Specific gravity.*Asked: .*1\.025.*Working: /)
+    await page.context().close()
+  })
+
+  it('is printed by keyboard, and says so where it could not be', async () => {
+    const page = await signedIn('registrar', { ...size, expectedErrors: refusals(503) }, '/bench/bath-dose')
+    await button(page, 'Fill in an example').click()
+    const print = button(page, 'Print as PDF')
+    await print.focus()
+    const [download] = await Promise.all([page.waitForEvent('download'), page.keyboard.press('Enter')])
+    expect(download.suggestedFilename()).toBe('bath-dose.pdf')
+    const text = textOf(readFileSync(await download.path())).replaceAll('\n', ' ')
+    expect(text).toContain('Not a treatment order, not signed.')
+    expect(text).toContain('by Test registrar')
+    expect(text).toContain('1.1317')
+    await page.route('**/api/bench/bath-dose/sheet', (route) =>
+      route.fulfill({
+        status: 503,
+        contentType: 'application/problem+json',
+        body: JSON.stringify({ code: 'print-busy', title: 'Too much is being printed at once', status: 503 }),
+      }),
+    )
+    await print.click()
+    await page.getByRole('alert').getByText('Too much is being printed at once').waitFor()
+    await expectSound(page, 'a sheet to print')
     await page.context().close()
   })
 

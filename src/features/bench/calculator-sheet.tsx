@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { useDeferredValue, useMemo, useState } from 'react'
 import { Link, useLocation } from 'react-router-dom'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate } from '../../../shared/bench/evaluate.ts'
@@ -13,6 +13,8 @@ import type { Draft } from './bench-draft.ts'
 import { CarryPane } from './carry-pane.tsx'
 import { EnclosureField } from './enclosure-field.tsx'
 import { InputFields } from './input-fields.tsx'
+import { BenchPlot } from './plot.tsx'
+import { PrintButton } from './print-button.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
@@ -21,7 +23,10 @@ import { useEnclosureWater } from './use-enclosure-water.ts'
 export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   const { state } = useLocation()
   const [draft, setDraft] = useState(() => draftLeft(of, state) ?? emptyDraft(of, rememberedUnits()))
-  const evaluation = useMemo(() => evaluate(of, bodyOf(of, draft)), [of, draft])
+  const body = useMemo(() => bodyOf(of, draft), [of, draft])
+  const evaluation = useMemo(() => evaluate(of, body), [of, body])
+  // the curve asks the calculator dozens of times: it follows once the figure stands
+  const drawnBody = useDeferredValue(body)
   const water = useEnclosureWater(of, setDraft, enclosureLeft(state))
   const untouched = isUntouched(draft)
   const startAgain = (next: Draft) => {
@@ -90,7 +95,10 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
         </section>
         {evaluation.ok ? (
           <div className="pane stack">
-            <ResultGrounds of={of} answer={evaluation.answer} />
+            <ResultGrounds of={of} answer={evaluation.answer}>
+              <BenchPlot of={of} body={drawnBody} />
+            </ResultGrounds>
+            <PrintButton of={of} draft={draft} />
             <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
           </div>
         ) : null}
