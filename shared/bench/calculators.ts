@@ -11,6 +11,7 @@ import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
+import { measuredVolume } from './calculators/measured-volume.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
@@ -39,6 +40,7 @@ export const calculators: readonly AnyCalculator[] = [
   unionisedAmmoniaCalculator,
   specificGravity,
   tankVolume,
+  measuredVolume,
   washOut,
   waterChanges,
   salinityChange,
