@@ -1,13 +1,19 @@
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { bleachSolution } from './calculators/bleach-solution.ts'
+import { contactTime } from './calculators/contact-time.ts'
+import { copperByAlkalinityCalculator } from './calculators/copper-by-alkalinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { dechlorination } from './calculators/dechlorination.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
+import { ozoneDose } from './calculators/ozone-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
+import { tricaineBath } from './calculators/tricaine-bath.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
@@ -18,7 +24,9 @@ import type { AnyCalculator } from './definition.ts'
 export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
+  copperByAlkalinityCalculator,
   injection,
+  tricaineBath,
   tankVolume,
   washOut,
   waterChanges,
@@ -29,6 +37,10 @@ export const calculators: readonly AnyCalculator[] = [
   lengthWeight,
   oxygenSaturation,
   barometricPressure,
+  dechlorination,
+  bleachSolution,
+  contactTime,
+  ozoneDose,
   unitConversion,
 ]
 

@@ -16,6 +16,7 @@ import units from './cases/units.json' with { type: 'json' }
 import { publishedCases, type PublishedCase, type Runner } from './published-case.ts'
 import { anaesthesiaRunners } from './runners/anaesthesia-runners.ts'
 import { copperRunners } from './runners/copper-runners.ts'
+import { disinfectionRunners } from './runners/disinfection-runners.ts'
 import { growthRunners } from './runners/growth-runners.ts'
 import { injectionFeedRunners } from './runners/injection-feed-runners.ts'
 import { neutralisationRunners } from './runners/neutralisation-runners.ts'
@@ -55,6 +56,7 @@ const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
   seawaterRunners,
   anaesthesiaRunners,
   copperRunners,
+  disinfectionRunners,
   growthRunners,
   injectionFeedRunners,
   neutralisationRunners,
