@@ -1,3 +1,4 @@
+import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
 import { bleachSolution } from './calculators/bleach-solution.ts'
@@ -5,16 +6,27 @@ import { contactTime } from './calculators/contact-time.ts'
 import { copperByAlkalinityCalculator } from './calculators/copper-by-alkalinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { dechlorination } from './calculators/dechlorination.ts'
+import { concentrationReached } from './calculators/concentration-reached.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
+import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
+import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
+import { makeUpDose } from './calculators/make-up-dose.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { ozoneDose } from './calculators/ozone-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
+import { specificGravity } from './calculators/specific-gravity.ts'
+import { seawaterDensity } from './calculators/seawater-density.ts'
+import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { tricaineBath } from './calculators/tricaine-bath.ts'
 import { turnover } from './calculators/turnover.ts'
+import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
 import { washOut } from './calculators/wash-out.ts'
 import { waterChanges } from './calculators/water-changes.ts'
@@ -27,6 +39,13 @@ export const calculators: readonly AnyCalculator[] = [
   copperByAlkalinityCalculator,
   injection,
   tricaineBath,
+  makeUpDose,
+  concentrationReached,
+  stockSolution,
+  flowThroughBath,
+  injection,
+  unionisedAmmoniaCalculator,
+  specificGravity,
   tankVolume,
   washOut,
   waterChanges,
@@ -36,12 +55,17 @@ export const calculators: readonly AnyCalculator[] = [
   groupBiomassCalculator,
   lengthWeight,
   oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
+  seawaterDensity,
+  freezingPoint,
   barometricPressure,
   dechlorination,
   bleachSolution,
   contactTime,
   ozoneDose,
   unitConversion,
+  ammoniaForms,
 ]
 
 const byId = new Map(calculators.map((each) => [each.id, each]))

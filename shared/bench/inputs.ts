@@ -26,6 +26,8 @@ export interface QuantityInput {
   /** A whole number: fish, changes, sides. */
   whole?: true
   optional?: true
+  /** Stable code of the refusal when it is left empty, where more is to be said than that; its sentence is `refusal.<code>`. */
+  missing?: string
   when?: When
   /** This input states the relative error, in percent, of another. */
   errorOf?: string

@@ -68,6 +68,7 @@ function readQuantity(
     value === '' ||
     (typeof value === 'string' && value.trim() === '')
   if (blank && input.optional) return ok(undefined)
+  if (blank && input.missing !== undefined) return refuse(input.missing, name)
   const dimensions = [...new Set(input.units.map((unit) => unitOf(unit).dimension))]
   const unit = own(given, 'unit')
   // "mg/kg" is a code of its own and also how people write milligrams per kilogram of feed: the code goes first

@@ -23,8 +23,13 @@ const signedIn = (size: typeof deskSize, at: string): Promise<Page> =>
 
 const field = (page: Page, name: string) => page.getByRole('textbox', { name: new RegExp(`^${name}`) })
 const result = (page: Page) => page.getByRole('region', { name: 'Result' })
-const choose = (page: Page, name: string, label: string) =>
-  page.getByLabel(name, { exact: true }).selectOption({ label })
+/** A choice is a list, or buttons side by side where its answers are few and short. */
+const choose = async (page: Page, name: string, label: string) => {
+  const list = page.getByRole('combobox', { name: new RegExp(`^${name}( \\(optional\\))?$`) })
+  const button = page.getByRole('radiogroup', { name }).getByRole('radio', { name: label, exact: true })
+  await list.or(button).first().waitFor()
+  await ((await list.isVisible()) ? list.selectOption({ label }) : button.click())
+}
 const unit = async (page: Page, name: string, label: string) => {
   await page.getByLabel(new RegExp(`^Unit.*${name}`, 'i')).selectOption({ label })
 }
@@ -107,6 +112,40 @@ describe.each([deskSize, phoneSize])('the bench at $width px', (size) => {
     await expectSound(page, 'an injection')
     await picture(page, 'injection')
     await page.context().close()
+  })
+
+  it('asks for what a specific gravity, a pH and an ammonia test leave open', async () => {
+    const page = await signedIn(size, '/bench/specific-gravity')
+    await choose(page, 'What to find', 'Salinity')
+    await field(page, 'Specific gravity read').fill('1.025')
+    await field(page, 'Temperature of the water').fill('25')
+    await result(page).getByText('60/60 °F (15.56 °C)', { exact: false }).waitFor()
+    await field(page, 'Reference temperature of the instrument').fill('25')
+    // check value sginv.06: 33.19, EOS-80 inverted (computed)
+    await result(page)
+      .getByText(/^33\.2/)
+      .waitFor()
+
+    await page.goto(`${app.url}/bench/un-ionised-ammonia`)
+    await field(page, 'Total ammonia by a test').fill('1')
+    await field(page, 'pH of the water').fill('8')
+    await field(page, 'Temperature of the water').fill('25')
+    await field(page, 'Salinity of the water').fill('35')
+    await result(page).getByText('Choose what the test counts ammonia as', { exact: false }).waitFor()
+    await choose(page, 'What the test counts it as', 'As nitrogen (NH₃-N, TAN)')
+    await result(page).getByText('Choose what the pH meter was calibrated with', { exact: false }).waitFor()
+    await choose(page, 'What the pH meter was calibrated with', 'Not known')
+    // published examples at pH 8, 25 °C, S 35: 0.0440 free, 0.0556 total
+    await result(page)
+      .getByText(/^0\.0440/)
+      .waitFor()
+    await result(page)
+      .getByText(/0\.0556/)
+      .first()
+      .waitFor()
+    await page.getByText('Act on the higher figure', { exact: false }).waitFor()
+    await expectSound(page, 'un-ionised ammonia')
+    await picture(page, 'un-ionised-ammonia')
   })
 
   it('remembers a unit, empties its fields, and says when there is no such calculator', async () => {

@@ -14,6 +14,7 @@ import salinityChange from './cases/salinity-change.json' with { type: 'json' }
 import tankGeometry from './cases/tank-geometry.json' with { type: 'json' }
 import units from './cases/units.json' with { type: 'json' }
 import { publishedCases, type PublishedCase, type Runner } from './published-case.ts'
+import { ammoniaRunners } from './runners/ammonia-runners.ts'
 import { anaesthesiaRunners } from './runners/anaesthesia-runners.ts'
 import { copperRunners } from './runners/copper-runners.ts'
 import { disinfectionRunners } from './runners/disinfection-runners.ts'
@@ -48,6 +49,7 @@ export const groups: Readonly<Record<string, readonly PublishedCase[]>> = {
 
 /** Who computes which calculator. A new engine adds its map of runners here. */
 const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
+  ammoniaRunners,
   flowRunners,
   unitsRunners,
   waterRunners,

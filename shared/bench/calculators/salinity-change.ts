@@ -49,6 +49,7 @@ export const salinityChange = defineCalculator({
     'column.from': 'From',
     'column.to': 'To',
     'column.litres': 'Litres to swap',
+    'axis.column.to': 'Salinity after the step',
     'line.share': 'Share of the water',
     'line.litres': 'Water to swap',
     'line.days': 'Days',
@@ -57,9 +58,9 @@ export const salinityChange = defineCalculator({
     'line.sum': 'Water to swap in all',
     'line.through': 'Water to run through',
     'refusal.specific-gravity-as-salinity':
-      'This looks like a specific gravity. A salinity of sea water is about 35.',
+      'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
     'refusal.target-beyond-replacement':
-      'No swap reaches the salinity of the replacement water or goes past it. Check the three salinities, or take other water.',
+      'A swap goes no further than the salinity of the replacement water, and a flow does not quite reach it. Check the three salinities, or take other water.',
     'refusal.target-behind-start':
       'This replacement water leads the other way. Check the three salinities, or take other water.',
     'caution.faster-than-usual': (p: { usual: string }) =>

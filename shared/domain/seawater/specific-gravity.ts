@@ -10,11 +10,14 @@ const leastSpecificGravity = 0.995
 const mostSpecificGravity = 1.035
 
 /**
- * Whether a number given as a salinity is rather a specific gravity: above 1 and at most 1.035. Salinities are read to
- * a tenth, so that 1.0 remains one; 1.025 is the reading of a hydrometer in the wrong field.
+ * Whether a number given as a salinity may be a specific gravity in the wrong field: 0.99…1.05, of which 1.025 is sea
+ * water. 1.0 lies among them and may be either, so it is asked about too; 0.98 and 1.06 are the salinities next to it,
+ * nearer than instruments tell apart.
+ *
+ * @source check value sal.refuse2
  */
 export function readsAsSpecificGravity(salinityPss78: number): boolean {
-  return salinityPss78 > 1 && salinityPss78 <= mostSpecificGravity
+  return salinityPss78 >= 0.99 && salinityPss78 <= 1.05
 }
 
 /**
@@ -25,7 +28,7 @@ export function readsAsSpecificGravity(salinityPss78: number): boolean {
  * @param input.waterTemperatureC     °C, ITS-90, −2…40
  * @param input.referenceTemperatureC °C, ITS-90, 0…40, as printed on the instrument
  * @returns a ratio
- * @refuses not-finite · below-least · above-most · specific-gravity-as-salinity above 1 up to 1.035
+ * @refuses not-finite · below-least · above-most · specific-gravity-as-salinity from 0.99 to 1.05
  * @source  unesco-44 · check values sg.01 to sg.16
  */
 export function specificGravityFromSalinity(input: {

@@ -7,6 +7,7 @@ import { verifyWorking } from '../../../server/platform/arithmetic/verify-workin
 export function bodyOf(given: Readonly<Record<string, string>>): Record<string, unknown> {
   return Object.fromEntries(
     Object.entries(given).map(([name, text]) => {
+      if (text === '') return [name, undefined]
       const match = /^(-?[\d.,]+) (.+)$/.exec(text)
       return [name, match ? { value: match[1], unit: match[2] } : text]
     }),

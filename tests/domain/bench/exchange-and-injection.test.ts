@@ -61,6 +61,13 @@ describe('a change of salinity', () => {
     expect(Math.abs(once.figures[0].value - 1085.71)).toBeLessThanOrEqual(0.05)
     expect(Math.abs(through.figures[0].value - 1565.52)).toBeLessThanOrEqual(0.05)
   })
+  it('reaches the salinity of the new water by swapping all of it', async () => {
+    // (S1 − S2) ÷ (S1 − Sr) = 1; the last day of a plan takes the whole volume (computed)
+    const all = { ...given, target: '5 PSS-78', replacement: '5 PSS-78' }
+    expect((await ask('salinity-change', { ...all, way: 'once' })).figures[1]?.value).toBe(100)
+    const { schedule } = await ask('salinity-change', { ...all, perDay: '4 PSS-78' })
+    expect(schedule?.rows.at(-1)).toMatchObject({ 2: 5, 3: 2000 })
+  })
   it('warns of a rate above common practice, up sooner than down', async () => {
     const codes = async (change: Record<string, string>) =>
       (await ask('salinity-change', { ...given, ...change })).cautions.map((one) => one.code)
@@ -71,6 +78,18 @@ describe('a change of salinity', () => {
   })
   it.each([
     ['a specific gravity', { start: '1.026 PSS-78' }, 'start specific-gravity-as-salinity'],
+    ['the least that may be one', { start: '0.99 PSS-78' }, 'start specific-gravity-as-salinity'],
+    ['the most that may be one', { target: '1.05 PSS-78' }, 'target specific-gravity-as-salinity'],
+    [
+      'a specific gravity of the new water',
+      { target: '30 PSS-78', replacement: '1.02 PSS-78' },
+      'replacement specific-gravity-as-salinity',
+    ],
+    [
+      'a flow that should reach the new water itself',
+      { way: 'through', target: '5 PSS-78', replacement: '5 PSS-78' },
+      'target target-beyond-replacement',
+    ],
     [
       'a target beyond the replacement water',
       { target: '0 PSS-78', replacement: '5 PSS-78' },

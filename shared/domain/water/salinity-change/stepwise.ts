@@ -52,7 +52,10 @@ export function stepwiseSchedule(
   const days = stepwiseDays(input)
   if (!days.ok) return days
   const { startSalinity, targetSalinity, replacementSalinity, volumeLitres } = input
-  const at = (day: number) => startSalinity + ((targetSalinity - startSalinity) * day) / days.value
+  const at = (day: number) =>
+    day === days.value
+      ? targetSalinity
+      : startSalinity + ((targetSalinity - startSalinity) * day) / days.value
   return ok(
     Array.from({ length: days.value }, (_, before) => {
       const [fromSalinity, toSalinity] = [at(before), at(before + 1)]

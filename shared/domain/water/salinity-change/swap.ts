@@ -21,7 +21,10 @@ export interface SalinityChange {
 
 const salinity = (field: string) => ({ field, unit: 'PSS-78', min: 0, max: 42 }) as const
 
-/** Refuses what is no salinity, and a target that the replacement water cannot bring. */
+/**
+ * Refuses what is no salinity, and a target beyond the replacement water. The replacement's own salinity is reached by
+ * swapping all of the water.
+ */
 export function checkSalinityChange(input: SalinityChange): Result<SalinityChange, SalinityChangeRefusal> {
   const { startSalinity, targetSalinity, replacementSalinity } = input
   const refused = checkNumbers([
@@ -30,13 +33,13 @@ export function checkSalinityChange(input: SalinityChange): Result<SalinityChang
     [replacementSalinity, salinity('replacementSalinity')],
   ])
   if (refused) return refused
-  if (readsAsSpecificGravity(startSalinity)) return refuse('specific-gravity-as-salinity', 'startSalinity')
-  if (readsAsSpecificGravity(targetSalinity)) return refuse('specific-gravity-as-salinity', 'targetSalinity')
+  for (const [field, value] of Object.entries({ startSalinity, targetSalinity, replacementSalinity }))
+    if (readsAsSpecificGravity(value)) return refuse('specific-gravity-as-salinity', field)
   if (startSalinity === targetSalinity) return ok(input)
   const toGo = startSalinity - targetSalinity
   const towards = startSalinity - replacementSalinity
   if (Math.sign(toGo) !== Math.sign(towards)) return refuse('target-behind-start', 'targetSalinity')
-  return Math.abs(toGo) >= Math.abs(towards)
+  return Math.abs(toGo) > Math.abs(towards)
     ? refuse('target-beyond-replacement', 'targetSalinity')
     : ok(input)
 }
@@ -45,7 +48,7 @@ export function checkSalinityChange(input: SalinityChange): Result<SalinityChang
  * The share of the water to swap at once: (S1 − S2) ÷ (S1 − Sr). Density is left out: for 35 → 16 the exact balance gives
  * 0.549 instead of 0.543, well inside the error of measuring; measure again before the next step.
  *
- * @returns a fraction, 0 and below 1
+ * @returns a fraction, 0…1
  * @refuses not-finite, limits 0…42 · specific-gravity-as-salinity · target-beyond-replacement · target-behind-start
  * @source  salt-balance · check values sal.01 to sal.04, sal.refuse1, sal.refuse2
  */
@@ -73,9 +76,11 @@ export function swapLitres(
 }
 
 /**
- * Litres that have to run through at a constant level: V ln((S1 − Sr) ÷ (S2 − Sr)).
+ * Litres that have to run through at a constant level: V ln((S1 − Sr) ÷ (S2 − Sr)). The salinity of the replacement
+ * water itself is never quite reached.
  *
- * @refuses as swapLitres · not-finite (targetSalinity) so near to the replacement water that no volume reaches it
+ * @refuses as swapLitres · target-beyond-replacement also where the target is the replacement's own · not-finite
+ *          (targetSalinity) so near to it that no volume reaches it
  * @source  salt-balance · check value sal.06
  */
 export function continuousExchangeLitres(
@@ -87,6 +92,7 @@ export function continuousExchangeLitres(
   if (!checked.ok) return checked
   const { startSalinity, targetSalinity, replacementSalinity, volumeLitres } = input
   if (startSalinity === targetSalinity) return ok(0)
+  if (targetSalinity === replacementSalinity) return refuse('target-beyond-replacement', 'targetSalinity')
   return finiteOrRefuse(
     volumeLitres * Math.log((startSalinity - replacementSalinity) / (targetSalinity - replacementSalinity)),
     'targetSalinity',

@@ -1,0 +1,173 @@
+import { ok } from '../../domain/result.ts'
+import {
+  densityPerSalinity68,
+  densityPerSalinityAndHalf68,
+  pureWaterDensity68,
+  seawaterDensity68,
+} from '../../domain/seawater/seawater-density.ts'
+import {
+  salinityFromSpecificGravity,
+  specificGravityFromSalinity,
+} from '../../domain/seawater/specific-gravity.ts'
+import { temperature68 } from '../../domain/seawater/temperature-68.ts'
+import { valueTerm } from '../../domain/working/value-term.ts'
+import { defineMessages } from '../../messages/define-messages.ts'
+import { defineCalculator, type BenchLine } from '../definition.ts'
+import { choice, quantity } from '../inputs.ts'
+import { line } from '../line.ts'
+
+/** Salinity from a hydrometer or refractometer, and the specific gravity that a salinity has. */
+export const specificGravity = defineCalculator({
+  id: 'specific-gravity',
+  group: 'water',
+  weekly: true,
+  words: defineMessages({
+    name: 'Specific gravity and salinity',
+    purpose:
+      'Salinity from a hydrometer or refractometer, or the specific gravity that a salinity should show.',
+    formula: 'SG = density of the water ÷ density of pure water at the reference temperature (EOS-80)',
+    'input.find': 'What to find',
+    'option.find.salinity': 'Salinity',
+    'option.find.gravity': 'Specific gravity',
+    'input.gravity': 'Specific gravity read',
+    'input.salinity': 'Salinity',
+    'input.temperature': 'Temperature of the water',
+    'help.temperature': 'Of the water in the instrument when it was read.',
+    'input.reference': 'Reference temperature of the instrument',
+    'help.reference': 'Printed on it: 25/25 °C, 20/20 °C, 60 °F (15.56 °C) and others.',
+    'input.instrument': 'Instrument',
+    'option.instrument.hydrometer': 'Hydrometer',
+    'option.instrument.seawater': 'Refractometer scaled for sea water',
+    'option.instrument.brine': 'Refractometer scaled for brine (NaCl)',
+    'result.salinity': 'Salinity',
+    'result.gravity': 'Specific gravity',
+    'result.density': 'Density of the water',
+    'line.t68': 'Temperature on the scale of 1968',
+    'line.reference68': 'Reference temperature on that scale',
+    'line.reference-density': 'Pure water at the reference temperature',
+    'line.salinity': 'Salinity, found by halving; put back below',
+    'line.pure': 'Pure water at the temperature of the water',
+    'line.a': 'A, for each unit of salinity',
+    'line.b': 'B, for the power of 1.5',
+    'line.density': 'Density of the water',
+    'line.gravity': 'Specific gravity',
+    'refusal.reference-temperature-not-stated':
+      'Type the reference temperature of the instrument. 1.025 is a salinity of 33.2 on a 25/25 °C scale, 32.9 on 20/20 °C, 32.6 on 60/60 °F (15.56 °C), and 37.2 at 25 °C against water of 4 °C.',
+    'refusal.salinity-as-specific-gravity':
+      'This looks like a salinity. A specific gravity is written like 1.025.',
+    'refusal.specific-gravity-as-salinity':
+      'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
+    'refusal.lighter-than-fresh-water':
+      'This is lighter than fresh water at that temperature. Check both temperatures.',
+    'refusal.salinity-above-scale': 'This would be a salinity above 42, where the scale ends.',
+    'caution.brine': 'A scale for brine reads about 1.5 too high in sea water near 35 (from memory).',
+    'caution.low': 'Below a salinity of 2 a hydrometer says little; use a conductivity meter.',
+    'caution.instrument': 'Check the instrument against a standard solution, and rinse it with fresh water.',
+  }),
+  inputs: {
+    find: choice(['salinity', 'gravity']),
+    gravity: quantity({ units: ['SG'], when: { find: ['salinity'] } }),
+    salinity: quantity({
+      units: ['PSS-78'],
+      limits: { min: 0, max: 42 },
+      when: { find: ['gravity'] },
+      reading: 'salinity',
+    }),
+    temperature: quantity({
+      units: ['degC', 'degF'],
+      limits: { min: -2, max: 40, plausible: { max: 35 } },
+      reading: 'temperature',
+    }),
+    reference: quantity({
+      units: ['degC', 'degF'],
+      limits: { min: 0, max: 40 },
+      missing: 'reference-temperature-not-stated',
+    }),
+    instrument: choice(['hydrometer', 'seawater', 'brine'], { optional: true, when: { find: ['salinity'] } }),
+  },
+  fields: {
+    specificGravity: 'gravity',
+    salinityPss78: 'salinity',
+    waterTemperatureC: 'temperature',
+    referenceTemperatureC: 'reference',
+  },
+  example: {
+    find: 'salinity',
+    gravity: { value: '1.025', unit: 'SG' },
+    temperature: { value: '25', unit: 'degC' },
+    reference: { value: '25', unit: 'degC' },
+  },
+  sources: ['unesco-44'],
+  cautions: [{ code: 'instrument', level: 'note' }],
+  carries: [{ to: 'reading', parameter: 'salinity', figure: 'salinity' }],
+  published: ['salinity_from_specific_gravity', 'specific_gravity_from_salinity'],
+  compute({ find, gravity, salinity, temperature, reference, instrument }) {
+    const temperatures = {
+      waterTemperatureC: temperature.value,
+      referenceTemperatureC: reference.value,
+    }
+    const found =
+      find === 'salinity'
+        ? salinityFromSpecificGravity({ specificGravity: gravity?.value ?? NaN, ...temperatures })
+        : ok(salinity?.value ?? NaN)
+    if (!found.ok) return found
+    const shown = specificGravityFromSalinity({ salinityPss78: found.value, ...temperatures })
+    // a salinity just above 1 reads as a gravity only where a person typed it
+    if (!shown.ok && find === 'gravity') return shown
+    const t = temperature68(temperature.value)
+    const density = seawaterDensity68(found.value, t)
+    const ratio = density / pureWaterDensity68(temperature68(reference.value))
+    const [salt, sg] = [
+      { key: 'salinity', value: found.value, unit: 'PSS-78', figures: 3, kind: 'reading' },
+      { key: 'gravity', value: ratio, unit: 'SG', figures: 5, kind: 'reading' },
+    ] as const
+    const dense = { key: 'density', value: density, unit: 'kg/m3', figures: 6, kind: 'reading' } as const
+    return ok({
+      figures: find === 'salinity' ? [salt, dense] : [sg, dense],
+      working: workingOf(found.value, temperature.value, reference.value),
+      cautions: [
+        ...(instrument === 'brine' ? [{ code: 'brine', level: 'warning' as const }] : []),
+        ...(found.value < 2 ? [{ code: 'low', level: 'warning' as const }] : []),
+      ],
+    })
+  },
+})
+
+/** ρw as the source writes it, at a temperature of 1968. */
+const pureExpression = (t: string) =>
+  `999.842594 + 0.06793952 * ${t} - 0.00909529 * ${t}^2 + 0.0001001685 * ${t}^3 - 0.000001120083 * ${t}^4 + 0.000000006536332 * ${t}^5`
+
+function workingOf(salinity: number, temperatureC: number, referenceC: number): BenchLine[] {
+  const [t, r] = [temperature68(temperatureC), temperature68(referenceC)]
+  const reference = pureWaterDensity68(r)
+  const [pure, a, b] = [pureWaterDensity68(t), densityPerSalinity68(t), densityPerSalinityAndHalf68(t)]
+  const density = seawaterDensity68(salinity, t)
+  const [tt, rt, s] = [valueTerm(t, 'degC'), valueTerm(r, 'degC'), valueTerm(salinity, 'PSS-78')]
+  const number = (value: number) => valueTerm(value, 'ratio')
+  return [
+    line('reference68', `1.00024 * ${valueTerm(referenceC, 'degC')}`, r, 'degC'),
+    line('reference-density', pureExpression(rt), reference, 'ratio', ['reference68']),
+    line('t68', `1.00024 * ${valueTerm(temperatureC, 'degC')}`, t, 'degC'),
+    line('pure', pureExpression(tt), pure, 'ratio', ['t68']),
+    line(
+      'a',
+      `0.824493 - 0.0040899 * ${tt} + 0.000076438 * ${tt}^2 - 0.00000082467 * ${tt}^3 + 0.0000000053875 * ${tt}^4`,
+      a,
+      'ratio',
+      ['t68'],
+    ),
+    line('b', `-0.00572466 + 0.00010227 * ${tt} - 0.0000016546 * ${tt}^2`, b, 'ratio', ['t68']),
+    line('salinity', s, salinity, 'PSS-78'),
+    line(
+      'density',
+      `${number(pure)} + ${number(a)} * ${s} + ${number(b)} * ${s}^1.5 + 0.00048314 * ${s}^2`,
+      density,
+      'ratio',
+      ['pure', 'a', 'b', 'salinity'],
+    ),
+    line('gravity', `${number(density)} / ${number(reference)}`, density / reference, 'SG', [
+      'density',
+      'reference-density',
+    ]),
+  ]
+}
