@@ -8,7 +8,7 @@ import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { dechlorination } from './calculators/dechlorination.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
-import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { evaporation } from './calculators/evaporation.ts'
 import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { freezingPoint } from './calculators/freezing-point.ts'
@@ -20,6 +20,7 @@ import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { ozoneDose } from './calculators/ozone-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
+import { saltMass } from './calculators/salt-mass.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
 import { seawaterDensity } from './calculators/seawater-density.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
@@ -37,19 +38,20 @@ export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
   copperByAlkalinityCalculator,
-  injection,
-  tricaineBath,
   makeUpDose,
   concentrationReached,
   stockSolution,
   flowThroughBath,
   injection,
+  tricaineBath,
   unionisedAmmoniaCalculator,
   specificGravity,
   tankVolume,
   washOut,
   waterChanges,
   salinityChange,
+  saltMass,
+  evaporation,
   turnover,
   medicatedFeed,
   groupBiomassCalculator,
