@@ -6,10 +6,13 @@ import {
   calculatorContracts,
   listCalculators,
 } from '../../../shared/contracts/bench.contract.ts'
+import { askConnectedWater, askQuarantineClock } from '../../../shared/contracts/bench-questions.contract.ts'
 import { benchWords } from '../../../shared/messages/bench.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
+import { answerConnectedWater } from './connected-water.ts'
+import { answerQuarantineClock } from './quarantine-clock.ts'
 import { answerOf, presentAnswer, presentSource } from './answer.ts'
 
 /** One address for each calculator. Nothing is kept: a figure that matters is carried into an order, a volume or a reading. */
@@ -31,6 +34,8 @@ export function benchRoutes(): Route[] {
     ...calculatorContracts.map(({ of, contract }) =>
       route(contract, async ({ body }) => presentAnswer(of, await answerOf(of, body))),
     ),
+    route(askQuarantineClock, async ({ body }) => answerQuarantineClock(body)),
+    route(askConnectedWater, async ({ body }) => answerConnectedWater(body)),
     route(askUnknownCalculator, () =>
       Promise.reject(new Problem('not-found', { detail: benchWords.noSuch })),
     ),
