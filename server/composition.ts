@@ -114,6 +114,7 @@ export function compose(outside: Outside) {
     documents,
   })
   const handover = createHandover(parts)
+  const bench = createBench({ ...parts, facility: facility.service })
   const today = createToday({
     ...parts,
     facility: facility.service,
@@ -169,7 +170,7 @@ export function compose(outside: Outside) {
       ...quarantine.routes,
       ...handover.routes,
       ...today.routes,
-      ...createBench().routes,
+      ...bench.routes,
     ],
     /** Handlers of background work, by name. */
     jobs: { ...quarantine.jobs },

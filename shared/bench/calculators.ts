@@ -1,14 +1,22 @@
 import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { concentrationReached } from './calculators/concentration-reached.ts'
+import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
+import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
+import { makeUpDose } from './calculators/make-up-dose.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
+import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
+import { seawaterDensity } from './calculators/seawater-density.ts'
+import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
@@ -21,6 +29,10 @@ import type { AnyCalculator } from './definition.ts'
 export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
+  makeUpDose,
+  concentrationReached,
+  stockSolution,
+  flowThroughBath,
   injection,
   unionisedAmmoniaCalculator,
   specificGravity,
@@ -33,6 +45,10 @@ export const calculators: readonly AnyCalculator[] = [
   groupBiomassCalculator,
   lengthWeight,
   oxygenSaturation,
+  salinityFromConductivity,
+  conductivityFromSalinity,
+  seawaterDensity,
+  freezingPoint,
   barometricPressure,
   unitConversion,
   ammoniaForms,

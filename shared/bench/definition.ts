@@ -1,10 +1,12 @@
 import type { QuantityKind } from '../domain/quantities/formatted-quantity.ts'
 import type { Result } from '../domain/result.ts'
 import type { SourceKey } from '../domain/sources.ts'
+import type { ConcentrationBasis } from '../domain/units/basis.ts'
 import type { ParsedQuantity } from '../domain/units/parse-quantity.ts'
 import type { Quantity } from '../domain/units/quantity.ts'
 import type { UnitCode } from '../domain/units/unit-table.ts'
 import type { ReadingParameter } from '../domain/readings/parameters.ts'
+import type { VolumeSheet } from '../domain/water/volume-sheet.ts'
 import type { WorkingLine } from '../domain/working/working-line.ts'
 import type { Messages } from '../messages/define-messages.ts'
 import type { BenchGroup } from './groups.ts'
@@ -66,9 +68,27 @@ export interface Outcome {
 export type Plot =
   { vary: string; unit: UnitCode; from: number; to: number; figure: string } | { across: string; up: string }
 
+/** What a draft of an order takes over from the inputs; the rest of it has records of its own. */
+export interface OrderCarry {
+  to: 'order'
+  /** The input that is the target in the water. */
+  target?: string
+  /** The input that says what the target is of: in the words of an order, or with what each answer is called there. */
+  basis?: string | { input: string; as: Readonly<Record<string, ConcentrationBasis>> }
+  /** The input that is the smallest step of the balance or measure. */
+  division?: string
+}
+
+/** A determination of the volume of a water. Without a sheet it is a stated figure, which counts as an estimate. */
+export interface VolumeCarry<Inputs> {
+  to: 'volume'
+  /** The sheet that the result is worked out from; an error of zero was not stated. */
+  sheet?(given: Given<Inputs>): VolumeSheet
+}
+
 /** Where a result can be taken further. */
-export type Carry =
-  { to: 'order' } | { to: 'volume' } | { to: 'reading'; parameter: ReadingParameter; figure: string }
+export type Carry<Inputs = Readonly<Record<string, Input>>> =
+  OrderCarry | VolumeCarry<Inputs> | { to: 'reading'; parameter: ReadingParameter; figure: string }
 
 /**
  * All there is to say of one calculator. The bench screen, the API and its documents, the page of published values and
@@ -84,7 +104,7 @@ export interface Calculator<
   weekly?: true
   /**
    * name · purpose · input.<name> · help.<name> · option.<name>.<option> · result.<key> · line.<code> · column.<key> ·
-   * caution.<code> · refusal.<code> · formula
+   * caution.<code> · refusal.<code> · formula · axis.<key of another word> where that one is too short on a curve
    */
   words: Messages
   inputs: Inputs
@@ -96,7 +116,7 @@ export interface Calculator<
   /** Cautions that stand beside every answer. */
   cautions?: readonly BenchCaution[]
   plot?: Plot
-  carries?: readonly Carry[]
+  carries?: readonly Carry<Inputs>[]
   /** Names of the published values that it answers for. */
   published?: readonly string[]
   compute(given: Given<Inputs>): Result<Outcome>

@@ -25,6 +25,9 @@ export function formatRange(
   return { low: at(range.low), high: at(range.high) }
 }
 
+/** So many digits no table prints and nobody types: the arithmetic itself made them. */
+const madeDigits = 15
+
 /** A line of working as people read it: the arithmetic with its numbers put in, and what it gives. */
 export function formatLine(
   line: BenchLine,
@@ -33,6 +36,8 @@ export function formatLine(
   const earlier = new Set(
     lines.filter((each) => line.rests.includes(each.key)).map((each) => String(Math.abs(each.value))),
   )
+  for (const [number] of line.expression.matchAll(/\d+\.\d+/g))
+    if (number.replace('.', '').replace(/^0+/, '').length >= madeDigits) earlier.add(number)
   return { formula: formatExpression(line.expression, earlier), result: formatWorkingValue(line) }
 }
 

@@ -109,6 +109,11 @@ export const sources = {
       'IOC, SCOR and IAPSO 2010, TEOS-10 manual: reference salinity is 35.16504/35 of the practical one',
     mark: 'C',
   },
+  'fish-freezing': {
+    citation:
+      'General physiology, from memory: the blood of most bony fish freezes near −0.7 °C unless they carry antifreeze',
+    mark: 'M',
+  },
   'benson-krause-1984': {
     citation:
       'Benson and Krause 1984, Limnology and Oceanography 29, 620–632, as in US Geological Survey memorandum 2011.03 ' +

@@ -42,6 +42,7 @@ export const doseRefusals = defineMessages({
   'reading-at-or-above-target': () => 'The reading is at or above the target. Nothing is to be added.',
   'reading-not-comparable': () =>
     'A target in microlitres per litre has no reading. Give the target in mg/L.',
+  'nothing-missing': () => 'Nothing that counts is missing yet. Nothing is to be added.',
   'reading-too-old': (p) =>
     `The reading is ${p.said('minutes')} minutes old and counts for ${p.said('most')}. Read again before adding.`,
   'reading-in-future': () => 'The time of the reading lies in the future. Check the date and the time.',

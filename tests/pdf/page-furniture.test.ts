@@ -100,6 +100,29 @@ describe('page furniture', () => {
     }
   })
 
+  it('lets a working that no page could hold go on from page to page, its heading with its first line', async () => {
+    const lines = Array.from({ length: 120 }, (_, i) => ({
+      what: `Step ${String(i + 1)}.`,
+      formula: '1 + 1',
+      result: String(i),
+    }))
+    const bytes = await drawDocument(
+      historyLike(0, {
+        blocks: [
+          { kind: 'heading', text: 'Kept heading' },
+          { kind: 'working', lines },
+        ],
+      }),
+    )
+    const pages = pageTexts(bytes)
+    expect(pages.length).toBeLessThanOrEqual(5)
+    const pageOf = (text: string) => pages.findIndex((page) => page.includes(text))
+    expect(pageOf('Step 1.')).toBe(pageOf('Kept heading'))
+    expect([...textOf(bytes).matchAll(/^Step (\d+)\./gm)].map((match) => Number(match[1]))).toEqual(
+      lines.map((_, i) => i + 1),
+    )
+  })
+
   it('prints boxes for the pen at least 21 pt (28 px) high, with their unit in them', async () => {
     const bytes = await drawDocument(
       historyLike(0, {

@@ -1,4 +1,6 @@
 import { benchRoutes } from './bench.routes.ts'
+import { createSheetPrinter } from './print-sheet.ts'
+import type { SheetParts } from './print-sheet.ts'
 
 /** The free-standing calculators. */
-export const createBench = () => ({ routes: benchRoutes() })
+export const createBench = (parts: SheetParts) => ({ routes: benchRoutes(createSheetPrinter(parts)) })

@@ -36,7 +36,7 @@ export function paginate(pieces: readonly Piece[], roomOn: (page: number) => num
     const full = roomOn(Math.max(1, pages.length - 1))
     const repeated = onPage === 0 && piece.repeated ? piece.repeated.height : 0
     const room = roomOn(pages.length - 1) - used - (onPage ? piece.before : 0) - repeated
-    if (chainHeight(piece, queue) <= room + 0.01 || (onPage === 0 && piece.height <= room + 0.01)) {
+    if (heldHeight(piece, queue, full) <= room + 0.01 || (onPage === 0 && piece.height <= room + 0.01)) {
       if (repeated && piece.repeated) place(piece.repeated)
       place(piece)
       continue
@@ -59,6 +59,17 @@ export function paginate(pieces: readonly Piece[], roomOn: (page: number) => num
     turn()
   }
   return pages
+}
+
+/**
+ * The height that must be free to place a piece. A chain that no page could hold is broken where the page ends, and only
+ * the next piece is still kept: otherwise each of its links would begin a page of its own.
+ */
+function heldHeight(piece: Piece, rest: readonly Piece[], full: number): number {
+  const chain = chainHeight(piece, rest)
+  const next = rest.at(-1)
+  if (chain <= full || !next) return chain
+  return Math.min(chain, piece.height + next.before + next.height)
 }
 
 /** The height that must be free to place a piece with all it keeps with; the last one counts whole. */

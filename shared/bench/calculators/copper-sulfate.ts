@@ -78,7 +78,14 @@ export const copperSulfate = defineCalculator({
     { code: 'steps', level: 'note' },
     { code: 'volume', level: 'note' },
   ],
-  carries: [{ to: 'order' }],
+  carries: [
+    {
+      to: 'order',
+      target: 'target',
+      basis: { input: 'targetOf', as: { copper: 'free', compound: 'salt' } },
+      division: 'division',
+    },
+  ],
   published: ['copper_sulfate_g'],
   compute({ product, targetOf, target, measured, volume, purity, division }) {
     if (product === 'chelated') return refuse('ionic-target-chelated-product', 'product')

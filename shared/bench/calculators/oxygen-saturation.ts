@@ -142,11 +142,13 @@ export const oxygenSaturation = defineCalculator({
     const solubility = oxygenSolubility(under)
     if (!solubility.ok)
       return solubility.refusal.field === 'pressureKPa' ? refuse('air-too-thin', 'altitude') : solubility
+    const atOne = oxygenSolubility({ ...water, pressureKPa: standardAtmosphereKPa })
+    if (!atOne.ok) return atOne
     const second = garciaGordonOxygen(water)
     if (!second.ok) return second
     const found =
       find === 'percent' && oxygen
-        ? percentOf(oxygen, under, solubility.value)
+        ? percentOf(oxygen, under, solubility.value, atOne.value)
         : find === 'concentration' && percent
           ? amountAt(percent, under, solubility.value)
           : atSaturation(solubility.value)
@@ -164,7 +166,7 @@ export const oxygenSaturation = defineCalculator({
       figures: [first, ...rest, ...pressureFigure(air.value)],
       working: [
         ...saturationLines({ temperature, salinity }, air.value, solubility.value),
-        ...secondEquationLines({ temperature, salinity }, solubility.value, second.value),
+        ...secondEquationLines({ temperature, salinity }, atOne.value, second.value),
         ...lines,
       ],
       cautions,
@@ -206,7 +208,12 @@ interface UnderAir {
   pressureKPa: number
 }
 
-function percentOf(oxygen: ParsedQuantity, under: UnderAir, saturation: OxygenSolubility): Result<Found> {
+function percentOf(
+  oxygen: ParsedQuantity,
+  under: UnderAir,
+  saturation: OxygenSolubility,
+  atOne: OxygenSolubility,
+): Result<Found> {
   const byVolume = oxygen.unit === 'uL/L'
   const mass = byVolume ? oxygenByMass({ oxygenMlPerL: oxygen.value / 1000 }) : ok(oxygen.value)
   if (!mass.ok) return mass
@@ -220,7 +227,6 @@ function percentOf(oxygen: ParsedQuantity, under: UnderAir, saturation: OxygenSo
   if (!standard.ok) return standard
   const term = byVolume ? valueTerm(mass.value, 'mg/L') : enteredTerm(oxygen)
   const rests = byVolume ? ['oxygen'] : []
-  const atOne = standard.value.solubility.mgPerL
   const isStandard = under.pressureKPa === standardAtmosphereKPa
   const percentLine = (key: string, of: number, value: number, on: string) =>
     line(key, `100 * ${term} / (${valueTerm(of, 'mg/L')})`, value, 'percent', [...rests, on])
@@ -246,7 +252,7 @@ function percentOf(oxygen: ParsedQuantity, under: UnderAir, saturation: OxygenSo
         : []),
       ...(isStandard
         ? []
-        : [percentLine('percent-standard', atOne, standard.value.percent, 'first-standard')]),
+        : [percentLine('percent-standard', atOne.mgPerL, standard.value.percent, 'first-standard')]),
       percentLine('percent', saturation.mgPerL, local.value.percent, 'saturation'),
     ],
     mgPerL: mass.value,

@@ -49,6 +49,7 @@ export const salinityChange = defineCalculator({
     'column.from': 'From',
     'column.to': 'To',
     'column.litres': 'Litres to swap',
+    'axis.column.to': 'Salinity after the step',
     'line.share': 'Share of the water',
     'line.litres': 'Water to swap',
     'line.days': 'Days',

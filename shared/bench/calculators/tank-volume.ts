@@ -3,6 +3,7 @@ import type { ParsedQuantity } from '../../domain/units/parse-quantity.ts'
 import type { Quantity } from '../../domain/units/quantity.ts'
 import { computeVolume } from '../../domain/water/compute-volume.ts'
 import { shapeNames, type TankShape } from '../../domain/water/tank-shape.ts'
+import type { VolumeSheet } from '../../domain/water/volume-sheet.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
@@ -119,7 +120,7 @@ export const tankVolume = defineCalculator({
   },
   sources: ['mensuration', 'nist-sp-811'],
   cautions: [{ code: 'measure', level: 'note' }],
-  carries: [{ to: 'volume' }],
+  carries: [{ to: 'volume', sheet: sheetOf }],
   published: [
     'volume_rectangular_L',
     'tank_volume_us_gal',
@@ -138,31 +139,8 @@ export const tankVolume = defineCalculator({
     'system_volume_L',
   ],
   compute(given) {
-    const errorPercent = given.tankError?.value ?? 0
-    const { sump, bore, pipeLength, displaced } = given
-    const volume = computeVolume({
-      method: 'geometry',
-      parts: [
-        { key: 'tank', role: 'tank', shape: shapeOf(given), errorPercent },
-        ...(sump
-          ? [
-              {
-                key: 'sump',
-                role: 'sump' as const,
-                shape: { shape: 'stated' as const, volume: sump.entered },
-                errorPercent: 0,
-              },
-            ]
-          : []),
-      ],
-      pipes:
-        bore || pipeLength
-          ? [{ key: 'pipes', bore: entered(bore), length: entered(pipeLength), errorPercent: 0 }]
-          : [],
-      ...(displaced
-        ? { displacement: { by: 'share' as const, share: displaced.entered, errorPercent: 0 } }
-        : {}),
-    })
+    const { displaced } = given
+    const volume = computeVolume(sheetOf(given))
     if (!volume.ok) return volume
     const { netLitres, grossLitres, errorLitres, working } = volume.value
     return ok({
@@ -181,9 +159,40 @@ export const tankVolume = defineCalculator({
   },
 })
 
-type Lengths = Partial<Record<string, ParsedQuantity | string | undefined>>
+type Measured = { shape: (typeof shapes)[number] } & Partial<
+  Record<string, ParsedQuantity | string | undefined>
+>
 
-function shapeOf(given: { shape: (typeof shapes)[number] } & Lengths): TankShape {
+/** The sheet of the determination; an error that nobody stated is zero. */
+function sheetOf(given: Measured): VolumeSheet {
+  const at = (name: string) => given[name] as ParsedQuantity | undefined
+  const [sump, bore, pipeLength, displaced] = [at('sump'), at('bore'), at('pipeLength'), at('displaced')]
+  return {
+    method: 'geometry',
+    parts: [
+      { key: 'tank', role: 'tank', shape: shapeOf(given), errorPercent: at('tankError')?.value ?? 0 },
+      ...(sump
+        ? [
+            {
+              key: 'sump',
+              role: 'sump' as const,
+              shape: { shape: 'stated' as const, volume: sump.entered },
+              errorPercent: 0,
+            },
+          ]
+        : []),
+    ],
+    pipes:
+      bore || pipeLength
+        ? [{ key: 'pipes', bore: entered(bore), length: entered(pipeLength), errorPercent: 0 }]
+        : [],
+    ...(displaced
+      ? { displacement: { by: 'share' as const, share: displaced.entered, errorPercent: 0 } }
+      : {}),
+  }
+}
+
+function shapeOf(given: Measured): TankShape {
   const at = (name: string) => entered(given[name] as ParsedQuantity | undefined)
   const depth = at('depth')
   switch (given.shape) {

@@ -7,8 +7,8 @@ import type { BathDose } from './bath-dose.ts'
 import type { BathProduct, BathTarget, Measure } from './bath-product.ts'
 import type { DoseRefusal } from './dose-refusal.ts'
 import { measureAmount } from './measure-amount.ts'
-import { readTarget } from './read-target.ts'
-import { riseNeeded } from './rise-needed.ts'
+import { readTarget, type ReadTarget } from './read-target.ts'
+import { riseNeeded, type Rise } from './rise-needed.ts'
 
 export interface AmountInput {
   /** The line that gives the water to be dosed, in litres. */
@@ -19,19 +19,25 @@ export interface AmountInput {
   present?: Quantity
   product: BathProduct
   measure?: Measure
+  /** What is more than this, in mg/L or µL/L, is a slip; unless told, the limit of a bath. */
+  mostTarget?: number
 }
 
 /**
  * The amount of product that brings a volume of water to its target: the core of every bath.
  *
+ * @param riseOf by how much the water has to rise; unless told, the target less what a reading found
  * @refuses as readTarget, riseNeeded, amountFromProduct, amountFromMass and measureAmount · error-outside-range
  */
-export function computeAmount(input: AmountInput): Result<BathDose, DoseRefusal> {
+export function computeAmount(
+  input: AmountInput,
+  riseOf: (target: ReadTarget) => Result<Rise, DoseRefusal> = (target) => riseNeeded(target, input.present),
+): Result<BathDose, DoseRefusal> {
   const { volume, volumeErrorPercent: error, product } = input
   if (error !== undefined && !(error >= 0 && error <= 100)) return refuse('error-outside-range', 'error')
-  const target = readTarget(input.target)
+  const target = readTarget(input.target, input.mostTarget)
   if (!target.ok) return target
-  const rise = riseNeeded(target.value, input.present)
+  const rise = riseOf(target.value)
   if (!rise.ok) return rise
   const amount =
     target.value.basis === 'product'

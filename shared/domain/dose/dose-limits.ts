@@ -7,6 +7,8 @@
 export const doseLimits = {
   mostTargetMgPerL: 100_000,
   mostTargetUlPerL: 100_000,
+  /** mg or µL of a stock solution: a kilogram or a litre of something in a litre. */
+  mostStockPerL: 1_000_000,
   leastDensityGPerMl: 0.5,
   mostDensityGPerMl: 3,
   mostStrengthMgPerMl: 2000,

@@ -22,6 +22,7 @@ export type DoseRefusal =
   | 'changed-more-than-volume'
   | 'reading-at-or-above-target'
   | 'reading-not-comparable'
+  | 'nothing-missing'
   | 'reading-too-old'
   | 'reading-in-future'
   | 'retest-too-early'

@@ -12,7 +12,7 @@ import type { DoseRefusal } from './dose-refusal.ts'
  */
 export function litresLine(
   litres: number,
-  code: 'net-volume-used' | 'changed-volume-used',
+  code: 'net-volume-used' | 'changed-volume-used' | 'stock-volume-used',
   field: string,
 ): Result<WorkingLine, DoseRefusal> {
   if (typeof litres !== 'number' || !Number.isFinite(litres)) return refuse('not-finite', field)

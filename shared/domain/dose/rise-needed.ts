@@ -39,7 +39,7 @@ export function riseNeeded(target: ReadTarget, present: Quantity | undefined): R
 }
 
 /** A target is a dose: 0.10 mg/L is written 0.1 mg/L also in the working. */
-function targetTerm(target: ReadTarget['concentration']): string {
+export function targetTerm(target: ReadTarget['concentration']): string {
   const value = target.entered.value.replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '')
   return enteredTerm({ ...target, entered: { ...target.entered, value } })
 }

@@ -37,3 +37,27 @@ export function freezingPoint(input: {
   )
   return refused ?? ok(temperature90(freezingPoint68(salinityPss78, gaugePressureKPa / 10)))
 }
+
+/** Colder than any chiller in sea water; anything above is water. @source project-default */
+const leastSurfaceC = -80
+const mostSurfaceC = 40
+
+/**
+ * How far the coldest spot that the water touches is above the freezing point.
+ *
+ * @param input.coldestC as freezingPoint, and the temperature of that spot, −80…40 °C, ITS-90
+ * @returns °C; 0 or less where ice forms
+ * @refuses not-finite · below-least · above-most
+ * @source  unesco-44 (the freezing point)
+ */
+export function freezingMargin(input: {
+  salinityPss78: number
+  gaugePressureKPa: number
+  coldestC: number
+}): Result<number, SeawaterRefusal> {
+  const limits = { field: 'coldestC', unit: 'degC', min: leastSurfaceC, max: mostSurfaceC } as const
+  const coldest = checkNumber(input.coldestC, limits)
+  if (!coldest.ok) return coldest
+  const freezing = freezingPoint(input)
+  return freezing.ok ? ok(coldest.value - freezing.value) : freezing
+}

@@ -1,6 +1,11 @@
 /** Conductivity of sea water of salinity 35 at 15 °C (IPTS-68) at the surface, mS/cm. */
 export const standardConductivityMSPerCm = 42.914
 
+/** R at the surface: a conductivity relative to that of the standard. @source unesco-44 */
+export function ratioToStandard(conductivityMSPerCm: number): number {
+  return conductivityMSPerCm / standardConductivityMSPerCm
+}
+
 const a = [0.008, -0.1692, 25.3851, 14.0941, -7.0261, 2.7081] as const
 const b = [0.0005, -0.0056, -0.0066, -0.0375, 0.0636, -0.0144] as const
 
@@ -80,9 +85,59 @@ function powersOfRoot(coefficients: readonly number[], ratio: number): number {
   return coefficients.reduceRight((sum, each) => sum * root + each, 0)
 }
 
+/** A practical salinity with what it was made from. */
+export interface PracticalSalinitySteps {
+  /** r_t. */
+  temperatureRatio: number
+  /** R_t. */
+  ratio: number
+  /** √R_t, in whose powers both polynomials are. */
+  root: number
+  /** Σ a_i R_t^(i/2): the salinity if the water were at 15 °C. */
+  atFifteen: number
+  /** f. */
+  temperatureFactor: number
+  /** Σ a_i R_t^(i/2) + f Σ b_i R_t^(i/2). */
+  aboveTwo: number
+  /** What is taken off that where it is below 2; 0 otherwise. */
+  lowSalinityTerm: number
+  salinityPss78: number
+}
+
 /**
- * Practical salinity of 1978 where the temperature is on its own scale. It checks nothing: the engines around it do,
- * and published rows, which give temperatures on that scale, are held against it as they are printed.
+ * Practical salinity of 1978 step by step, where the temperature is on its own scale. It checks nothing: the engines
+ * around it do.
+ *
+ * @param conductivityRatio R = C(S,t,p) / C(35,15,0), above 0
+ * @param temperature68C    °C, IPTS-68, −2…40; the scale was fitted up to 35
+ * @param pressureDbar      above that of the air, dbar, 0…10,000
+ * @source  unesco-44 eqs 1 to 6, below 2 with hill-1986
+ */
+export function practicalSalinitySteps68(
+  conductivityRatio: number,
+  temperature68C: number,
+  pressureDbar: number,
+): PracticalSalinitySteps {
+  const ratio = ratioAtTemperature(conductivityRatio, temperature68C, pressureDbar)
+  const factor = temperatureFactor(temperature68C)
+  const atFifteen = powersOfRoot(a, ratio)
+  const aboveTwo = atFifteen + factor * powersOfRoot(b, ratio)
+  const taken = aboveTwo < 2 ? lowSalinityTerm(ratio, temperature68C) : 0
+  return {
+    temperatureRatio: temperatureRatio(temperature68C),
+    ratio,
+    root: Math.sqrt(ratio),
+    atFifteen,
+    temperatureFactor: factor,
+    aboveTwo,
+    lowSalinityTerm: taken,
+    salinityPss78: aboveTwo - taken,
+  }
+}
+
+/**
+ * Practical salinity of 1978 where the temperature is on its own scale. Published rows, which give temperatures on that
+ * scale, are held against it as they are printed.
  *
  * @param conductivityRatio R = C(S,t,p) / C(35,15,0), above 0
  * @param temperature68C    °C, IPTS-68, −2…40; the scale was fitted up to 35
@@ -95,9 +150,7 @@ export function practicalSalinity68(
   temperature68C: number,
   pressureDbar: number,
 ): number {
-  const ratio = ratioAtTemperature(conductivityRatio, temperature68C, pressureDbar)
-  const salinity = powersOfRoot(a, ratio) + temperatureFactor(temperature68C) * powersOfRoot(b, ratio)
-  return salinity < 2 ? salinity - lowSalinityTerm(ratio, temperature68C) : salinity
+  return practicalSalinitySteps68(conductivityRatio, temperature68C, pressureDbar).salinityPss78
 }
 
 /**

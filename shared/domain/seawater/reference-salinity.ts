@@ -1,5 +1,6 @@
 import { ok, type Result } from '../result.ts'
 import { checkSalinity } from './check-seawater.ts'
+import { seawaterDensity } from './seawater-density.ts'
 import type { SeawaterRefusal } from './seawater-refusal.ts'
 
 /**
@@ -14,4 +15,24 @@ import type { SeawaterRefusal } from './seawater-refusal.ts'
 export function referenceSalinity(input: { salinityPss78: number }): Result<number, SeawaterRefusal> {
   const checked = checkSalinity(input.salinityPss78)
   return checked.ok ? ok((checked.value * 35.16504) / 35) : checked
+}
+
+/**
+ * The mass of salt in a litre of standard sea water: what a salt is dosed by. It is 2.3 % more than the grams in a
+ * kilogram at 25 °C and salinity 35.
+ *
+ * @param input.salinityPss78 0…42
+ * @param input.temperatureC  °C, ITS-90, −2…40
+ * @returns g/L: reference salinity × ρ / 1000
+ * @refuses not-finite · below-least · above-most
+ * @source  teos-10 (reference salinity) · unesco-44 (the density)
+ */
+export function saltGPerLitre(input: {
+  salinityPss78: number
+  temperatureC: number
+}): Result<number, SeawaterRefusal> {
+  const reference = referenceSalinity(input)
+  if (!reference.ok) return reference
+  const density = seawaterDensity(input)
+  return density.ok ? ok((reference.value * density.value) / 1000) : density
 }

@@ -10,6 +10,7 @@ import {
 import {
   conductivityRatio68,
   practicalSalinity68,
+  ratioToStandard,
   standardConductivityMSPerCm,
 } from './practical-salinity.ts'
 import type { SeawaterRefusal } from './seawater-refusal.ts'
@@ -69,7 +70,7 @@ export function salinityFromConductivity(input: {
     checkTemperature(temperatureC),
   )
   if (refused) return refused
-  return onScale(conductivityMSPerCm / standardConductivityMSPerCm, temperatureC, 0, 'conductivityMSPerCm')
+  return onScale(ratioToStandard(conductivityMSPerCm), temperatureC, 0, 'conductivityMSPerCm')
 }
 
 function onScale(
@@ -108,4 +109,26 @@ export function conductivityRatioFromSalinity(input: {
     checkGaugePressure(gaugePressureKPa, mostPressureKPa),
   )
   return refused ?? ok(conductivityRatio68(salinityPss78, temperature68(temperatureC), gaugePressureKPa / 10))
+}
+
+/**
+ * What a meter without compensation shows at the surface in sea water of a practical salinity.
+ *
+ * @param input.salinityPss78 0…42
+ * @param input.temperatureC  °C, ITS-90, −2…40; above 35 the scale is extrapolated
+ * @returns R = C(S,t,0) / C(35,15,0), and 42.914 mS/cm × R
+ * @refuses not-finite · below-least · above-most
+ * @source  unesco-44, below 2 hill-1986 · check values pss78inv.01 to pss78inv.09, cond.10
+ */
+export function conductivityFromSalinity(input: {
+  salinityPss78: number
+  temperatureC: number
+}): Result<{ conductivityRatio: number; conductivityMSPerCm: number }, SeawaterRefusal> {
+  const ratio = conductivityRatioFromSalinity({ ...input, gaugePressureKPa: 0 })
+  return ratio.ok
+    ? ok({
+        conductivityRatio: ratio.value,
+        conductivityMSPerCm: ratio.value * standardConductivityMSPerCm,
+      })
+    : ratio
 }

@@ -1,9 +1,9 @@
 import { ok, refuse, type Result } from '../result.ts'
 import { parseQuantity } from '../units/parse-quantity.ts'
+import type { QuantityRefusal } from '../units/number-refusal.ts'
 import type { Quantity } from '../units/quantity.ts'
 import { enteredTerm } from '../working/entered-term.ts'
 import type { WorkingLine } from '../working/working-line.ts'
-import type { VolumeRefusal } from './volume-refusal.ts'
 import { waterLimits } from './water-limits.ts'
 
 /**
@@ -17,7 +17,10 @@ import { waterLimits } from './water-limits.ts'
 export function waterChangeShare(input: {
   changed: Quantity
   netVolume: Quantity
-}): Result<{ fraction: number; changedLitres: number; working: WorkingLine[] }, VolumeRefusal> {
+}): Result<
+  { fraction: number; changedLitres: number; working: WorkingLine[] },
+  QuantityRefusal | 'changed-more-than-volume'
+> {
   const rules = { dimension: 'volume', above: 0, max: waterLimits.mostLitres } as const
   const changed = parseQuantity(input.changed, { ...rules, field: 'changed' })
   if (!changed.ok) return changed

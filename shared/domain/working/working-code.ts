@@ -32,6 +32,9 @@ export const workingCodes = [
   // dose
   'net-volume-used',
   'changed-volume-used',
+  'stock-volume-used',
+  'kept-share',
+  'left-after-change',
   'rise-needed',
   'active-needed',
   'strength-from-w-v',

@@ -60,3 +60,34 @@ export function isUntouched(draft: Draft): boolean {
     typeof given === 'string' ? given === '' : given.value.trim() === '',
   )
 }
+
+/** The fields as a history entry keeps them, for whoever comes back. */
+export const keptDraft = (draft: Draft, enclosureId: string | null) => ({ draft, enclosureId })
+
+/** The fields that were left behind; null where there are none. Only what this calculator asks is taken. */
+export function draftLeft(of: AnyCalculator, state: unknown): Draft | null {
+  const left = (state as { draft?: unknown } | null)?.draft
+  if (typeof left !== 'object' || left === null) return null
+  const start = emptyDraft(of, {})
+  for (const [name, input] of Object.entries(of.inputs)) {
+    const given: unknown = Object.hasOwn(left, name) ? (left as Record<string, unknown>)[name] : undefined
+    if (input.kind === 'choice') {
+      if (typeof given === 'string') start[name] = given
+    } else if (isTyped(given)) start[name] = { value: given.value, unit: given.unit }
+  }
+  return start
+}
+
+/** The enclosure whose water had filled them; null where none had. */
+export function enclosureLeft(state: unknown): string | null {
+  const left = (state as { enclosureId?: unknown } | null)?.enclosureId
+  return typeof left === 'string' ? left : null
+}
+
+const isTyped = (given: unknown): given is { value: string; unit: string } =>
+  typeof given === 'object' &&
+  given !== null &&
+  'value' in given &&
+  'unit' in given &&
+  typeof given.value === 'string' &&
+  typeof given.unit === 'string'

@@ -1,5 +1,5 @@
-import { useMemo, useState } from 'react'
-import { Link } from 'react-router-dom'
+import { useDeferredValue, useMemo, useState } from 'react'
+import { Link, useLocation } from 'react-router-dom'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate } from '../../../shared/bench/evaluate.ts'
 import { say, sayRefusal } from '../../../shared/bench/words.ts'
@@ -8,19 +8,26 @@ import { paths } from '../../lib/paths.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
-import { bodyOf, emptyDraft, exampleDraft, isUntouched } from './bench-draft.ts'
+import { bodyOf, draftLeft, emptyDraft, enclosureLeft, exampleDraft, isUntouched } from './bench-draft.ts'
 import type { Draft } from './bench-draft.ts'
+import { CarryPane } from './carry-pane.tsx'
 import { EnclosureField } from './enclosure-field.tsx'
 import { InputFields } from './input-fields.tsx'
+import { BenchPlot } from './plot.tsx'
+import { PrintButton } from './print-button.tsx'
 import { rememberedUnits } from './remembered-units.ts'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
 
 /** One calculator: its fields, and the figure as one types, by the same code that the server answers with. */
 export function CalculatorSheet({ of }: { of: AnyCalculator }) {
-  const [draft, setDraft] = useState(() => emptyDraft(of, rememberedUnits()))
-  const evaluation = useMemo(() => evaluate(of, bodyOf(of, draft)), [of, draft])
-  const water = useEnclosureWater(of, setDraft)
+  const { state } = useLocation()
+  const [draft, setDraft] = useState(() => draftLeft(of, state) ?? emptyDraft(of, rememberedUnits()))
+  const body = useMemo(() => bodyOf(of, draft), [of, draft])
+  const evaluation = useMemo(() => evaluate(of, body), [of, body])
+  // the curve asks the calculator dozens of times: it follows once the figure stands
+  const drawnBody = useDeferredValue(body)
+  const water = useEnclosureWater(of, setDraft, enclosureLeft(state))
   const untouched = isUntouched(draft)
   const startAgain = (next: Draft) => {
     water.forget()
@@ -88,7 +95,11 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
         </section>
         {evaluation.ok ? (
           <div className="pane stack">
-            <ResultGrounds of={of} answer={evaluation.answer} />
+            <ResultGrounds of={of} answer={evaluation.answer}>
+              <BenchPlot of={of} body={drawnBody} />
+            </ResultGrounds>
+            <PrintButton of={of} draft={draft} />
+            <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
           </div>
         ) : null}
       </Area>

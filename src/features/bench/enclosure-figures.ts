@@ -13,6 +13,7 @@ import { minutesBetween } from '../../../shared/domain/time/instant-arithmetic.t
 import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import { benchEnclosureWords as words } from '../../../shared/messages/bench-enclosure.ts'
+import { sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { parameterNames, volumeMethodNames } from '../../../shared/messages/water.ts'
 import { volumeRefusalWords, waterWords } from '../../../shared/messages/water-sheet.ts'
 import { netVolumeText, readingText } from '../water/index.ts'
@@ -26,8 +27,8 @@ export interface FoundFigure {
   shown: string
   /** When it was found out, for the age; null where nobody has. */
   at: string | null
-  /** Where it comes from, given how long ago that was. */
-  says(ago: string): string
+  /** Where it comes from, given when that was: how long ago, or the time. */
+  says(when: string): string
   /** Set once it is older than it may be. */
   oldAt(now: string): string | null
 }
@@ -197,6 +198,17 @@ export function withEnclosureFigures(
     if (!isTyped) next[name] = found[name]?.fill ?? { value: '', unit: given.unit }
   }
   return next
+}
+
+/** Where the figure in a field comes from, with the time at which it was found; undefined where a person typed it. */
+export function originOf(
+  figure: FoundFigure | undefined,
+  given: Draft[string] | undefined,
+  zone: string,
+): string | undefined {
+  if (!figure || !isFilledBy(figure, given)) return undefined
+  const at = figure.at === null ? '' : sayInstantWithOffset(figure.at, zone)
+  return figure.says(at).replace(/\.$/, '')
 }
 
 /** What is said beside a field that an enclosure can fill. */

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
 import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
@@ -38,7 +39,16 @@ export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: Bench
 }
 
 /** Everything behind the result: cautions, the steps of a plan, the working, the sources. */
-export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
+export function ResultGrounds({
+  of,
+  answer,
+  children,
+}: {
+  of: AnyCalculator
+  answer: BenchAnswer
+  /** Stands between the working and the sources. */
+  children?: ReactNode
+}) {
   const { working, schedule } = answer
   const [answered] = answer.figures
   const at = working.findLastIndex((line) => line.value === answered.value)
@@ -89,6 +99,7 @@ export function ResultGrounds({ of, answer }: { of: AnyCalculator; answer: Bench
         <WorkingBlock label={words.working} rows={rows} />
         <p className="t-note">{say(of, 'formula')}</p>
       </section>
+      {children}
       <details className="bench-sources">
         <summary>{words.sources({ count: answer.sources.length })}</summary>
         <ul>

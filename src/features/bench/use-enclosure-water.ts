@@ -1,4 +1,4 @@
-import { useRef, useState } from 'react'
+import { useEffect, useRef, useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { isProblem } from '../../lib/problem-error.ts'
@@ -7,7 +7,7 @@ import { useMe } from '../../lib/me.ts'
 import { everyEnclosure } from '../enclosures/index.ts'
 import { enclosureWaterQuery } from '../water/index.ts'
 import type { Draft } from './bench-draft.ts'
-import { enclosureFigures, noteOf, withEnclosureFigures } from './enclosure-figures.ts'
+import { enclosureFigures, noteOf, originOf, withEnclosureFigures } from './enclosure-figures.ts'
 import type { FieldNote, FoundFigure } from './enclosure-figures.ts'
 
 interface Chosen {
@@ -18,8 +18,16 @@ interface Chosen {
   aheadMs: number
 }
 
-/** The enclosure whose figures stand in the fields. It is asked anew each time it is chosen. */
-export function useEnclosureWater(of: AnyCalculator, change: (next: (draft: Draft) => Draft) => void) {
+/**
+ * The enclosure whose figures stand in the fields. It is asked anew each time it is chosen.
+ *
+ * @param startId the enclosure that was chosen when the sheet was left for a form
+ */
+export function useEnclosureWater(
+  of: AnyCalculator,
+  change: (next: (draft: Draft) => Draft) => void,
+  startId: string | null,
+) {
   const client = useQueryClient()
   const { zone } = useMe().facility
   const [wanted, setWanted] = useState<string | null>(null)
@@ -60,6 +68,13 @@ export function useEnclosureWater(of: AnyCalculator, change: (next: (draft: Draf
     }
   }
 
+  const first = useRef(startId)
+  useEffect(() => {
+    const id = first.current
+    first.current = null
+    if (id !== null) void choose(id)
+  })
+
   return {
     id: wanted,
     /** The enclosure whose water answered. */
@@ -68,6 +83,9 @@ export function useEnclosureWater(of: AnyCalculator, change: (next: (draft: Draf
     wrong,
     choose,
     forget,
+    /** Where the figure in a field comes from; undefined where a person typed it. */
+    originOf: (name: string, given: Draft[string] | undefined) =>
+      originOf(chosen?.figures[name], given, zone),
     /** What is said beside a field; undefined where no enclosure has anything to say. */
     note(name: string, given: Draft[string] | undefined): FieldNote | undefined {
       const figure = chosen?.figures[name]

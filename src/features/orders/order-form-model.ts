@@ -60,6 +60,24 @@ export const emptyOrder = (): OrderValues => ({
   stated: nothingStated,
 })
 
+/** The parts of an order that the bench can fill in. */
+export type CarriedPart = 'enclosureId' | 'target' | 'basis' | 'division'
+export type CarriedParts = Pick<BathOrderFields, 'target' | 'basis' | 'division'> & {
+  enclosureId: string | null
+}
+
+/** A new order with what came from the bench; everything else is open. */
+export function carriedOrder({ enclosureId, target, basis, division }: CarriedParts): OrderValues {
+  const start = emptyOrder()
+  return {
+    ...start,
+    enclosureId,
+    target: target ?? start.target,
+    basis,
+    division: division ?? start.division,
+  }
+}
+
 const numberText = (value: number | null) => (value === null ? '' : String(value))
 
 /** A draft as the server keeps it, back in the form. */

@@ -5,6 +5,8 @@ import { Save } from 'lucide-react'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderListWords, orderViewWords } from '../../../shared/messages/orders-screens.ts'
+import { carryState, useCarried } from '../../lib/bench-carry.ts'
+import type { CarryTo } from '../../lib/bench-carry.ts'
 import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { paths } from '../../lib/paths.ts'
@@ -21,11 +23,12 @@ import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { formularyQuery } from '../formulary/index.ts'
 import { answersToSend, noAnswers, whyNotSign } from './answers-model.ts'
 import type { Answers } from './answers-model.ts'
+import { CarriedIntoOrder } from './carried-order.tsx'
 import { CourseFields } from './course-fields.tsx'
 import { JudgedCautions } from './judged-cautions.tsx'
 import { OrderFields } from './order-fields.tsx'
 import { OrderFormFoot } from './order-form-foot.tsx'
-import { emptyOrder, fieldsOf, valuesOf } from './order-form-model.ts'
+import { carriedOrder, emptyOrder, fieldsOf, valuesOf } from './order-form-model.ts'
 import type { OrderValues } from './order-form-model.ts'
 import { faultLabel } from './fault-label.ts'
 import { AmountNotes, OrderConditions, OrderWater, OrderWorking } from './order-parts.tsx'
@@ -51,7 +54,8 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
   const sign = useMay('order.sign')
   const draft = useMay('order.draft')
   const isProposal = draft.conditions.includes('proposal-only')
-  const [start] = useState(() => startOf(opened, zone))
+  const carried = useCarried('order')
+  const [start] = useState(() => startOf(opened, zone, carried))
   const [values, setValues] = useState<OrderValues>(start)
   const [answers, setAnswers] = useState<Answers>(
     () => (location.state as { answers?: Answers } | null)?.answers ?? noAnswers,
@@ -95,7 +99,10 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
     // the address of a kept draft is its own; what was answered to the cautions goes with it
     if (location.pathname !== paths.editOrder(order.number)) {
       letGo()
-      void navigate(paths.editOrder(order.number), { replace: true, state: { answers } })
+      void navigate(paths.editOrder(order.number), {
+        replace: true,
+        state: { answers, ...(carried ? carryState(carried) : {}) },
+      })
     }
   }
   const signNow = async (password: string) => {
@@ -137,6 +144,7 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
         />
         <div className="pane stack gap-4">
           {above}
+          {carried ? <CarriedIntoOrder carried={carried} /> : null}
           {isProposal ? <p className="hint">{words.proposalNote}</p> : null}
           {stale && fields ? (
             <StaleChoice
@@ -233,9 +241,10 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
   )
 }
 
-/** The form of a draft, of a signed order to be amended, or empty. */
-function startOf(opened: Order | null, zone: string): OrderValues {
+/** The form of a draft, of a signed order to be amended, with what came from the bench, or empty. */
+function startOf(opened: Order | null, zone: string, carried: CarryTo<'order'> | null): OrderValues {
   const signed = opened?.versions[0]?.content as { fields?: Order['draft'] } | undefined
   const fields = opened?.draft ?? signed?.fields ?? null
-  return fields ? valuesOf(fields, zone) : emptyOrder()
+  if (fields) return valuesOf(fields, zone)
+  return carried ? carriedOrder(carried) : emptyOrder()
 }

@@ -5,8 +5,11 @@ import { checkReading } from '../../../shared/domain/readings/check-reading.ts'
 import { judgeReading } from '../../../shared/domain/readings/judge-reading.ts'
 import { parameterOf, phScales } from '../../../shared/domain/readings/parameters.ts'
 import type { PhScale, ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
+import { roundedTo } from '../../../shared/bench/round-figure.ts'
+import { convert } from '../../../shared/domain/units/convert.ts'
 import { isUnitCode } from '../../../shared/domain/units/is-unit-code.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { unitsOf } from '../../../shared/domain/units/units-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
@@ -22,6 +25,8 @@ export interface ReadingField {
   value: string
   unit: string
   below: boolean
+  /** The figure that the bench worked out for it, and how; the note goes with that figure alone. */
+  computed?: { value: string; unit: string; note: string }
 }
 
 /** Units that instruments for a parameter are read in; kelvins and grams per litre are not among them. */
@@ -71,6 +76,31 @@ export function emptyField(
   return { id, parameter, value: '', unit, below: false }
 }
 
+/** Whether a field still holds the figure of the bench. */
+export function isAsComputed(
+  field: ReadingField,
+): field is ReadingField & Required<Pick<ReadingField, 'computed'>> {
+  const { computed } = field
+  return computed !== undefined && field.value.trim() === computed.value && field.unit === computed.unit
+}
+
+/** A field with a figure of the bench, in a unit that the parameter is entered in; as it was where there is none. */
+export function withComputed(field: ReadingField, figure: Quantity, note: string): ReadingField {
+  const options = entryUnitsOf(field.parameter).map(({ unit }) => unit)
+  const put = (value: string, unit: string) => ({ ...field, value, unit, computed: { value, unit, note } })
+  // which electrode scale a computed pH is on is not known: it stays on the one that the field opens on
+  if (field.parameter === 'ph' && figure.unit === 'pH') return put(figure.value, field.unit)
+  if (options.includes(figure.unit)) return put(figure.value, figure.unit)
+  const unit = options.find(
+    (one) => isUnitCode(one) && unitOf(one).dimension === unitOf(figure.unit).dimension,
+  )
+  if (!isUnitCode(unit)) return field
+  const there = convert(Number(figure.value), figure.unit, unit)
+  if (!there.ok) return field
+  const digits = figure.value.replace(/^-/, '').replace('.', '').replace(/^0+/, '').length || 1
+  return put(there.value === 0 ? '0' : roundedTo(there.value, digits), unit)
+}
+
 type SentReading = BodyOf<typeof recordReadings>['readings'][number]
 
 /** A field as it is sent; null while it is empty. */
@@ -84,6 +114,7 @@ export function readingOf(field: ReadingField, instrument: string): SentReading 
     ...(field.below ? { below: true } : {}),
     ...(scale ? { scale } : {}),
     instrument: instrument.trim() || null,
+    ...(isAsComputed(field) ? { note: field.computed.note } : {}),
   }
 }
 

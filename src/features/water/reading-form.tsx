@@ -5,6 +5,8 @@ import { parameterOf, readingParameters } from '../../../shared/domain/readings/
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import { readingWords } from '../../../shared/messages/reading-words.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
+import type { Quantity } from '../../../shared/domain/units/quantity.ts'
+import { saidNote, useCarried } from '../../lib/bench-carry.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
@@ -23,9 +25,17 @@ import { Tick } from '../../ui/tick.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { LeaveQuestion } from '../../ui/leave-question.tsx'
+import { CarriedReading } from './carried-water.tsx'
 import { useRecordReadings } from './mutations.ts'
 import { parametersOf } from './parameter-order.ts'
-import { emptyField, entryUnitsOf, judgeField, pointerOf, readingsBody } from './reading-form-model.ts'
+import {
+  emptyField,
+  entryUnitsOf,
+  judgeField,
+  pointerOf,
+  readingsBody,
+  withComputed,
+} from './reading-form-model.ts'
 import type { ReadingField } from './reading-form-model.ts'
 import { rangeText, readingText } from './reading-text.ts'
 import { parameterHeading } from './parameter-heading.ts'
@@ -41,9 +51,14 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
   const refusal = useRefusal()
   const [bodyId, setBodyId] = useState(waterBodyId ?? '')
   const [instrument, setInstrument] = useState('')
+  const carried = useCarried('reading')
   const [fields, setFields] = useState<ReadingField[]>(() => {
     const known = parametersOf(water.ranges, water.latest)
-    return (known.length > 0 ? known : usual).map((parameter) => fieldFor(parameter))
+    const shown = known.length > 0 ? known : usual
+    if (!carried) return shown.map((parameter) => fieldFor(parameter))
+    const { parameter, value, said } = carried
+    const others = shown.filter((one) => one !== parameter).map((one) => fieldFor(one))
+    return [withComputed(fieldFor(parameter), value as Quantity, saidNote(said)), ...others]
   })
 
   function fieldFor(parameter: ReadingParameter): ReadingField {
@@ -99,6 +114,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
           }}
         >
           <WrongSummary fields={[]} general={refusal.general([...shownPointers, '/happenedAt'])} />
+          {carried ? <CarriedReading carried={carried} isIn={fields.some((one) => one.computed)} /> : null}
           <div className="reading-fields">
             {water.bodies.length > 1 ? (
               <SelectField

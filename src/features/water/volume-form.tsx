@@ -8,6 +8,7 @@ import { sayDate } from '../../../shared/messages/say-date.ts'
 import { sayNumberRefusal } from '../../../shared/messages/say-number-refusal.ts'
 import { methodWords, volumeWords } from '../../../shared/messages/volume-form.ts'
 import { waterWords } from '../../../shared/messages/water-sheet.ts'
+import { useCarried } from '../../lib/bench-carry.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
@@ -26,6 +27,8 @@ import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { MomentAndNote } from './moment-and-note.tsx'
+import { draftOfCarried } from './carried-volume.ts'
+import { CarriedVolume, noteOfCarried } from './carried-water.tsx'
 import { useDetermineVolume } from './mutations.ts'
 import { VolumeDrawing } from './volume-drawing.tsx'
 import { volumeDrawing } from './volume-drawing-model.ts'
@@ -60,10 +63,12 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
   const [id] = useState(newId)
   const [isolationId, setIsolationId] = useState('')
   const [nextCheckOn, setNextCheckOn] = useState('')
-  const [note, setNote] = useState('')
+  const carried = useCarried('volume')
+  const [note, setNote] = useState(() => (carried ? noteOfCarried(carried) : ''))
   const [tried, setTried] = useState(false)
   const [start] = useState<VolumeDraft>(() => {
     const empty = emptyDraft(water.bodies, treatmentVessel)
+    if (carried) return draftOfCarried(carried.sheet as VolumeSheet, empty, code)
     const earlier = water.volume.volume?.sheet as VolumeSheet | undefined
     return earlier ? draftOfSheet(earlier, empty) : empty
   })
@@ -162,6 +167,7 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
         </div>
       </Area>
       <Area className="pane">
+        {carried ? <CarriedVolume carried={carried} /> : null}
         <form
           id="volume-form"
           className="tank-form tank-form-wide"
@@ -172,7 +178,7 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
           }}
         >
           <VolumeMethodFields draft={draft} onChange={setDraft} lengthUnit={lengthUnit} wrong={wrong} />
-          {water.volume.volume && draft.method === 'geometry' ? (
+          {water.volume.volume && !carried && draft.method === 'geometry' ? (
             <ComputedLine what={volumeWords.lengthsKept} from={sayDate(water.volume.volume.happenedOn)} />
           ) : null}
           {draft.method === 'geometry' ? (

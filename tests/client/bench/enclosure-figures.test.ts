@@ -9,6 +9,7 @@ import {
   enclosureFigures,
   fillableInputs,
   noteOf,
+  originOf,
   withEnclosureFigures,
 } from '../../../src/features/bench/enclosure-figures.ts'
 import type { FoundFigure } from '../../../src/features/bench/enclosure-figures.ts'
@@ -118,6 +119,10 @@ describe('figures of an enclosure on the bench', () => {
       says: expect.stringMatching(/^Changed by you\./),
       take: { value: '2181.4', unit: 'L' },
     })
+    expect(originOf(found['volume'], kept['volume'], zone)).toBeUndefined()
+    expect(originOf(found['volume'], found['volume']?.fill ?? undefined, zone)).toContain(
+      'found 30\u00a0Nov\u00a02026, 10:00, UTC−4 by Test technician',
+    )
     const other = withEnclosureFigures(kept, enclosureFigures(bathDose, water(), zone), found)
     expect(other['volume']).toEqual({ value: '2200', unit: 'L' })
     expect(other['volumeError']).toEqual({ value: '', unit: 'percent' })

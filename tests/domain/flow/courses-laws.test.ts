@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { Result } from '../../../shared/domain/result.ts'
 import { changeCourse } from '../../../shared/domain/water/flow/change-course.ts'
+import { dripConcentration, dripRate, dripTotal } from '../../../shared/domain/water/flow/drip-rate.ts'
 import { remainingAfterChanges } from '../../../shared/domain/water/remaining-after-changes.ts'
 
 const valueOf = <T>(result: Result<T>): T => {
@@ -60,6 +61,23 @@ describe('the course of water changes', () => {
   })
 })
 
+describe('a drip', () => {
+  it('makes the concentration that it was reckoned for, and takes its rate over the time', () => {
+    fc.assert(
+      fc.property(between(0.1, 1e4), between(0.01, 900), between(1, 1000), (flow, target, stockMgPerMl) => {
+        const dripMlPerMin = valueOf(dripRate({ inflowLPerMin: flow, targetMgPerL: target, stockMgPerMl }))
+        const made = valueOf(dripConcentration({ inflowLPerMin: flow, dripMlPerMin, stockMgPerMl }))
+        expect(made / target).toBeCloseTo(1, 9)
+        const total = valueOf(dripTotal({ dripMlPerMin, minutes: 60, primingMl: 7, stockMgPerMl }))
+        expect(total.stockMl).toBeCloseTo(dripMlPerMin * 60 + 7, 6)
+        // what goes in with the stock goes out with the water, once the tank is at its target
+        const out = (flow + dripMlPerMin / 1000) * 60 * target
+        expect((total.drugMg - 7 * stockMgPerMl) / out).toBeCloseTo(1, 9)
+      }),
+    )
+  })
+})
+
 const nonsense = [
   NaN,
   Infinity,
@@ -90,6 +108,8 @@ describe('nonsense', () => {
             changes: d,
             loss: { halfLifeHours: a, intervalHours: b },
           }),
+          dripConcentration({ inflowLPerMin: a, dripMlPerMin: b, stockMgPerMl: c }),
+          dripTotal({ dripMlPerMin: a, minutes: b, primingMl: c, stockMgPerMl: d }),
         ]
         for (const answer of answers) {
           const text = JSON.stringify(answer, (_, value: unknown) =>

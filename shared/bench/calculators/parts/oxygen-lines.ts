@@ -20,7 +20,6 @@ export const oxygenLineWords = {
   'line.first-standard': 'At one atmosphere',
   'line.second-ts': 'Second equation: scaled temperature',
   'line.second': 'Second equation, Garcia and Gordon, at one atmosphere',
-  'line.difference': 'The first less the second',
 } as const
 
 /** Benson and Krause, step by step: ends in the line `saturation`. */
@@ -75,22 +74,26 @@ export function saturationLines(
   ]
 }
 
-/** The second equation beside the first, both at one atmosphere, and how far apart they are. */
+/**
+ * The second equation beside the first. How far apart they are is no line: two figures so near each other leave a
+ * difference that no second evaluation bears out to nine digits.
+ *
+ * @param first the first equation at one atmosphere
+ */
 export function secondEquationLines(
   water: { temperature: ParsedQuantity; salinity: ParsedQuantity },
-  { freshWaterMgPerL, salinityFactor }: OxygenSolubility,
+  first: OxygenSolubility,
   second: GarciaGordonOxygen,
 ): BenchLine[] {
   const [t, s] = [enteredTerm(water.temperature), enteredTerm(water.salinity)]
-  const first = freshWaterMgPerL * salinityFactor
   const by = valueTerm(second.ts, 'ratio')
   const fresh = `2.00907 + 3.22014 * ${by} + 4.0501 * ${by}^2 + 4.94457 * ${by}^3 - 0.256847 * ${by}^4 + 3.88767 * ${by}^5`
   const salt = `0.00624523 + 0.00737614 * ${by} + 0.010341 * ${by}^2 + 0.00817083 * ${by}^3`
   return [
     line(
       'first-standard',
-      `${valueTerm(freshWaterMgPerL, 'mg/L')} * ${valueTerm(salinityFactor, 'ratio')} to mg/L`,
-      first,
+      `${valueTerm(first.freshWaterMgPerL, 'mg/L')} * ${valueTerm(first.salinityFactor, 'ratio')} to mg/L`,
+      first.mgPerL,
       'mg/L',
       ['fresh', 'salt-factor'],
     ),
@@ -101,13 +104,6 @@ export function secondEquationLines(
       second.mgPerL,
       'mg/L',
       ['second-ts'],
-    ),
-    line(
-      'difference',
-      `${valueTerm(first, 'mg/L')} - ${valueTerm(second.mgPerL, 'mg/L')} to mg/L`,
-      first - second.mgPerL,
-      'mg/L',
-      ['first-standard', 'second'],
     ),
   ]
 }

@@ -88,9 +88,12 @@ export function sizeOf({ share, changed, volume }: GivenSize): Result<Size> {
     if (!volume) return refuse('volume-missing', 'volume')
     const found = waterChangeShare({ changed: changed.entered, netVolume: volume.entered })
     if (!found.ok) return found
-    const { fraction, changedLitres, working } = found.value
+    const { changedLitres, working } = found.value
+    // the percentage that the working shows is the one that is used: of nearly all the water the rest has few digits
+    const percent = found.value.fraction * 100
+    const fraction = percent / 100
     if (fraction < leastFraction) return refuse('change-too-small', 'changed')
-    const keeps = `(1 - ${valueTerm(fraction * 100, 'percent')} / 100)`
+    const keeps = `(1 - ${valueTerm(percent, 'percent')} / 100)`
     const litresLines = [line('litres-each', `${enteredTerm(changed)} to L`, changedLitres, 'L')]
     return ok({
       fraction,

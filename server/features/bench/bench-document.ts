@@ -1,0 +1,148 @@
+import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
+import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { sayInputs } from '../../../shared/bench/say-inputs.ts'
+import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
+import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
+import { sources } from '../../../shared/domain/sources.ts'
+import type { Zone } from '../../../shared/domain/time/instant.ts'
+import { benchPaper } from '../../../shared/messages/bench-paper.ts'
+import { sourceMarks } from '../../../shared/messages/bench-sheet.ts'
+import { sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { standingCaution } from '../../platform/pdf/standing-caution.ts'
+
+export interface BenchPaper {
+  of: AnyCalculator
+  /** What the calculator was asked, as it came. */
+  body: unknown
+  answer: BenchAnswer
+  facility: string
+  zone: Zone
+  paper: 'a4' | 'letter'
+  printedBy: string
+  /** ISO 8601 */
+  printedAt: string
+}
+
+function resultBlocks({ of, answer }: BenchPaper): DocumentBlock[] {
+  const [result, ...others] = answer.figures
+  const { number, symbol } = formatFigure(result)
+  const ends = answer.range && formatRange(answer.range, result)
+  const amount: DocumentBlock = {
+    kind: 'amount',
+    above: [{ text: say(of, `result.${result.key}`), bold: true }],
+    value: number,
+    unit: symbol,
+    lines: [],
+    ...(ends ? { limits: benchPaper.range({ low: ends.low.text, high: ends.high.text }) } : {}),
+  }
+  if (others.length === 0) return [amount]
+  const entries = others.map((figure) => ({
+    label: say(of, `result.${figure.key}`),
+    value: formatFigure(figure).text,
+  }))
+  return [amount, { kind: 'grid', entries }]
+}
+
+function inputBlocks({ of, body }: BenchPaper): DocumentBlock[] {
+  const entries = sayInputs(of, body).map(({ what, text }) => ({ label: what, value: text }))
+  return [
+    { kind: 'heading', text: benchPaper.asked },
+    { kind: 'grid', entries },
+  ]
+}
+
+function workingBlocks({ of, answer: { figures, working } }: BenchPaper): DocumentBlock[] {
+  const [result] = figures
+  const at = working.findLastIndex((line) => line.value === result.value)
+  const total = at === -1 ? working.length - 1 : at
+  const lines = working.map((line, i) => {
+    const { formula, result: shown } = formatLine(line, working)
+    return { what: sayLine(of, line), formula, result: shown.text, total: i === total }
+  })
+  return [
+    { kind: 'heading', text: benchPaper.working },
+    { kind: 'working', lines },
+    { kind: 'paragraph', size: 'small', text: say(of, 'formula') },
+  ]
+}
+
+function scheduleBlocks({ of, answer: { schedule } }: BenchPaper): DocumentBlock[] {
+  if (!schedule) return []
+  return [
+    { kind: 'heading', text: benchPaper.schedule },
+    {
+      kind: 'table',
+      columns: schedule.columns.map(({ key }) => ({
+        head: say(of, `column.${key}`),
+        share: 1,
+        align: 'right',
+      })),
+      rows: schedule.rows.map((row) =>
+        schedule.columns.map((column, i) => formatCell(row[i] ?? 0, column).text),
+      ),
+      emptyText: benchPaper.noSteps,
+    },
+  ]
+}
+
+function cautionBlocks({ of, answer: { cautions } }: BenchPaper): DocumentBlock[] {
+  if (cautions.length === 0) return []
+  const gravest = [...cautions].sort((a, b) => Number(a.level === 'note') - Number(b.level === 'note'))
+  return [
+    { kind: 'heading', text: benchPaper.cautions },
+    ...gravest.map((one): DocumentBlock => ({
+      kind: 'caution',
+      level: one.level,
+      lines: [sayCaution(of, one)],
+    })),
+  ]
+}
+
+const sourceBlocks = ({ answer }: BenchPaper): DocumentBlock[] => [
+  { kind: 'heading', text: benchPaper.sources },
+  ...answer.sources.map((key): DocumentBlock => {
+    const { citation, mark } = sources[key]
+    return {
+      kind: 'paragraph',
+      size: 'small',
+      text: benchPaper.sourceLine({ citation, mark: sourceMarks[mark] }),
+    }
+  }),
+]
+
+/** A question to the bench with its answer on paper. Every page says that it is no order and that nobody signed it. */
+export function benchDocument(paper: BenchPaper): PdfDocumentModel {
+  const name = say(paper.of, 'name')
+  return {
+    title: benchPaper.title({ name }),
+    language: 'en',
+    paper: paper.paper,
+    head: { facility: paper.facility, name: benchPaper.title({ name }), source: say(paper.of, 'purpose') },
+    signers: [],
+    notice: benchPaper.notice,
+    printed: {
+      by: paper.printedBy,
+      at: sayInstantWithOffset(paper.printedAt, paper.zone),
+      atIso: paper.printedAt,
+      note: benchPaper.notKept,
+    },
+    blocks: [
+      {
+        kind: 'columns',
+        divided: true,
+        columns: [
+          { share: 1, blocks: resultBlocks(paper) },
+          { share: 1.25, blocks: inputBlocks(paper) },
+        ],
+      },
+      { kind: 'rule' },
+      // what has to be heeded stands on the first page, however long the working is
+      ...cautionBlocks(paper),
+      ...workingBlocks(paper),
+      ...scheduleBlocks(paper),
+      ...sourceBlocks(paper),
+      standingCaution(),
+    ],
+  }
+}

@@ -1,0 +1,41 @@
+import { benchCarryWords as words } from '../../shared/messages/bench-carry.ts'
+
+/** On a form: what was carried into it from the bench, with everything that it rests on. */
+export function FromBench({
+  head,
+  says,
+  inputs,
+  working,
+}: {
+  head: string
+  /** What became of it here. */
+  says: string
+  inputs: readonly string[]
+  working: readonly string[]
+}) {
+  return (
+    <section className="from-bench" aria-label={words.heading}>
+      <p>
+        <strong>{head}</strong> {says}
+      </p>
+      <details className="fold">
+        <summary>{words.grounds}</summary>
+        <Lines title={words.asked} lines={inputs} />
+        <Lines title={words.working} lines={working} />
+      </details>
+    </section>
+  )
+}
+
+function Lines({ title, lines }: { title: string; lines: readonly string[] }) {
+  return (
+    <>
+      <p className="t-label">{title}</p>
+      <ul>
+        {lines.map((line) => (
+          <li key={line}>{line}</li>
+        ))}
+      </ul>
+    </>
+  )
+}

@@ -1,0 +1,25 @@
+import { describe, expect, it } from 'vitest'
+import { line } from '../../../shared/bench/line.ts'
+import { formatLine } from '../../../shared/bench/present.ts'
+import { ask } from './ask.ts'
+
+const shown = (text: string) => text.replaceAll('\u00a0', ' ')
+
+describe('a line of working as it is shown', () => {
+  it('shortens what the arithmetic made, and no figure that somebody typed or printed', () => {
+    const made = line('y', '2000 L * (32.285714285714285 - 29.57142857142857) / 999.842594', 1, 'L')
+    expect(shown(formatLine(made, [made]).formula)).toBe('2,000 L × (32.29 − 29.57) ÷ 999.842594')
+  })
+
+  it('leaves no such figure in a plan of several days', async () => {
+    const { working } = await ask('salinity-change', {
+      way: 'steps',
+      start: '35 PSS-78',
+      target: '16 PSS-78',
+      replacement: '0 PSS-78',
+      volume: '2000 L',
+      perDay: '3 PSS-78',
+    })
+    for (const each of working) expect(formatLine(each, working).formula).not.toMatch(/\d\.\d{10}/)
+  })
+})
