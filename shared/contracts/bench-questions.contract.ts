@@ -39,7 +39,7 @@ export const askQuarantineClock = contract({
           z.object({
             day0On: LocalDate.describe('Day 0 of the leg'),
             startedByEventId: EventId,
-            endedByEventId: EventId.nullable(),
+            endedByEventId: EventId.nullable().describe('Restart that ended it'),
             endedOn: LocalDate.nullable().describe('Day of the restart that ended it'),
             daysRun: z.int().nullable().describe('Days that it had counted; they no longer count'),
           }),
