@@ -4,7 +4,8 @@ import type { LimitRefusal } from '../units/number-refusal.ts'
 import { concentrationRules } from './flow/flow-limits.ts'
 import { waterLimits } from './water-limits.ts'
 
-export type TracerRefusal = LimitRefusal | 'not-finite' | 'reading-did-not-rise' | 'rise-within-error' | 'volume-not-of-a-tank'
+export type TracerRefusal =
+  LimitRefusal | 'not-finite' | 'reading-did-not-rise' | 'rise-within-error' | 'volume-not-of-a-tank'
 
 export interface TracerVolume {
   riseMgPerL: number
