@@ -4,6 +4,7 @@ import { bathDose } from './calculators/bath-dose.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
 import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { evaporation } from './calculators/evaporation.ts'
 import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
 import { freezingPoint } from './calculators/freezing-point.ts'
@@ -14,6 +15,7 @@ import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
+import { saltMass } from './calculators/salt-mass.ts'
 import { specificGravity } from './calculators/specific-gravity.ts'
 import { seawaterDensity } from './calculators/seawater-density.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
@@ -40,6 +42,8 @@ export const calculators: readonly AnyCalculator[] = [
   washOut,
   waterChanges,
   salinityChange,
+  saltMass,
+  evaporation,
   turnover,
   medicatedFeed,
   groupBiomassCalculator,

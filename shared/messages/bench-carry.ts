@@ -31,7 +31,8 @@ export const benchCarryWords = defineMessages({
     'Filled in from it; the volume is worked out anew as it is recorded, and counts once another person has confirmed it. Errors that were not stated on the bench are left open.',
   inVolumeStated:
     'Filled in as a stated figure, which counts as an estimate. The working on the bench stands in the note.',
-  inReading: 'Filled in from it: worked out, not measured. It is recorded with how, as its note.',
+  inReading:
+    'Filled in from it: worked out, not measured. It is recorded with how, as its note. Set the time to when the water was measured.',
   inReadingNot: 'Its unit is not one that this reading is entered in. Type the figure.',
 })
 

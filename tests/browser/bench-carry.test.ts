@@ -167,7 +167,7 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     await button(page, 'Use as a reading of salinity').click()
     await page.waitForURL(/\/measure$/)
     await fromBench(page)
-      .getByText(/worked out, not measured/)
+      .getByText(/worked out, not measured.*Set the time to when the water was measured/)
       .waitFor()
     const salinity = page.getByRole('textbox', { name: /^Salinity/ })
     const figure = await salinity.inputValue()

@@ -1,10 +1,5 @@
 import { ok } from '../../domain/result.ts'
-import {
-  densityPerSalinity68,
-  densityPerSalinityAndHalf68,
-  pureWaterDensity68,
-  seawaterDensity68,
-} from '../../domain/seawater/seawater-density.ts'
+import { pureWaterDensity68, seawaterDensity68 } from '../../domain/seawater/seawater-density.ts'
 import {
   salinityFromSpecificGravity,
   specificGravityFromSalinity,
@@ -15,6 +10,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { densityLines, densityLineWords, pureExpression } from './parts/seawater-density-lines.ts'
 
 /** Salinity from a hydrometer or refractometer, and the specific gravity that a salinity has. */
 export const specificGravity = defineCalculator({
@@ -42,14 +38,10 @@ export const specificGravity = defineCalculator({
     'result.salinity': 'Salinity',
     'result.gravity': 'Specific gravity',
     'result.density': 'Density of the water',
-    'line.t68': 'Temperature on the scale of 1968',
+    ...densityLineWords,
     'line.reference68': 'Reference temperature on that scale',
     'line.reference-density': 'Pure water at the reference temperature',
     'line.salinity': 'Salinity, found by halving; put back below',
-    'line.pure': 'Pure water at the temperature of the water',
-    'line.a': 'A, for each unit of salinity',
-    'line.b': 'B, for the power of 1.5',
-    'line.density': 'Density of the water',
     'line.gravity': 'Specific gravity',
     'refusal.reference-temperature-not-stated':
       'Type the reference temperature of the instrument. 1.025 is a salinity of 33.2 on a 25/25 °C scale, 32.9 on 20/20 °C, 32.6 on 60/60 °F (15.56 °C), and 37.2 at 25 °C against water of 4 °C.',
@@ -133,38 +125,16 @@ export const specificGravity = defineCalculator({
   },
 })
 
-/** ρw as the source writes it, at a temperature of 1968. */
-const pureExpression = (t: string) =>
-  `999.842594 + 0.06793952 * ${t} - 0.00909529 * ${t}^2 + 0.0001001685 * ${t}^3 - 0.000001120083 * ${t}^4 + 0.000000006536332 * ${t}^5`
-
 function workingOf(salinity: number, temperatureC: number, referenceC: number): BenchLine[] {
-  const [t, r] = [temperature68(temperatureC), temperature68(referenceC)]
+  const r = temperature68(referenceC)
   const reference = pureWaterDensity68(r)
-  const [pure, a, b] = [pureWaterDensity68(t), densityPerSalinity68(t), densityPerSalinityAndHalf68(t)]
-  const density = seawaterDensity68(salinity, t)
-  const [tt, rt, s] = [valueTerm(t, 'degC'), valueTerm(r, 'degC'), valueTerm(salinity, 'PSS-78')]
+  const density = seawaterDensity68(salinity, temperature68(temperatureC))
   const number = (value: number) => valueTerm(value, 'ratio')
   return [
     line('reference68', `1.00024 * ${valueTerm(referenceC, 'degC')}`, r, 'degC'),
-    line('reference-density', pureExpression(rt), reference, 'ratio', ['reference68']),
-    line('t68', `1.00024 * ${valueTerm(temperatureC, 'degC')}`, t, 'degC'),
-    line('pure', pureExpression(tt), pure, 'ratio', ['t68']),
-    line(
-      'a',
-      `0.824493 - 0.0040899 * ${tt} + 0.000076438 * ${tt}^2 - 0.00000082467 * ${tt}^3 + 0.0000000053875 * ${tt}^4`,
-      a,
-      'ratio',
-      ['t68'],
-    ),
-    line('b', `-0.00572466 + 0.00010227 * ${tt} - 0.0000016546 * ${tt}^2`, b, 'ratio', ['t68']),
-    line('salinity', s, salinity, 'PSS-78'),
-    line(
-      'density',
-      `${number(pure)} + ${number(a)} * ${s} + ${number(b)} * ${s}^1.5 + 0.00048314 * ${s}^2`,
-      density,
-      'ratio',
-      ['pure', 'a', 'b', 'salinity'],
-    ),
+    line('reference-density', pureExpression(valueTerm(r, 'degC')), reference, 'ratio', ['reference68']),
+    line('salinity', valueTerm(salinity, 'PSS-78'), salinity, 'PSS-78'),
+    ...densityLines(salinity, 'salinity', temperatureC),
     line('gravity', `${number(density)} / ${number(reference)}`, density / reference, 'SG', [
       'density',
       'reference-density',

@@ -1,5 +1,6 @@
 import { ok, type Result } from '../result.ts'
-import { checkSalinity } from './check-seawater.ts'
+import { checkNumber } from '../units/check-number.ts'
+import { checkSalinity, mostSalinity } from './check-seawater.ts'
 import { seawaterDensity } from './seawater-density.ts'
 import type { SeawaterRefusal } from './seawater-refusal.ts'
 
@@ -35,4 +36,19 @@ export function saltGPerLitre(input: {
   if (!reference.ok) return reference
   const density = seawaterDensity(input)
   return density.ok ? ok((reference.value * density.value) / 1000) : density
+}
+
+/**
+ * The practical salinity of sea water that holds a mass of salt in a kilogram; the way back from referenceSalinity.
+ *
+ * @param input.salinityGPerKg 0…42.2
+ * @returns practical salinity, no unit: S × 35 / 35.16504
+ * @refuses not-finite · below-least · above-most
+ * @source  teos-10 · check value sref.01 the other way round
+ */
+export function practicalOfReference(input: { salinityGPerKg: number }): Result<number, SeawaterRefusal> {
+  const max = (mostSalinity * 35.16504) / 35
+  const checked = checkNumber(input.salinityGPerKg, { field: 'salinityGPerKg', unit: 'g/kg', min: 0, max })
+  // the last binary digit of the limit is not to push it over
+  return checked.ok ? ok(Math.min(mostSalinity, (checked.value * 35) / 35.16504)) : checked
 }

@@ -15,10 +15,10 @@ const degrees = (least: number, most: number) =>
     hundredths(least, most).map((text) => `${text} degC`),
     hundredths(least * 1.8 + 32.01, most * 1.8 + 31.99).map((text) => `${text} degF`),
   )
-/** Salinities as they are typed; those between 1 and 1.035 are taken for specific gravities. */
+/** Salinities as they are typed; those from 0.99 to 1.05 are taken for specific gravities. */
 const salinities = (least: number, most: number) =>
   hundredths(least, most)
-    .filter((text) => !(Number(text) > 1 && Number(text) <= 1.035))
+    .filter((text) => Number(text) < 0.99 || Number(text) > 1.05)
     .map((text) => `${text} PSS-78`)
 const pressures = fc.oneof(
   hundredths(700, 1100).map((text) => `${text} hPa`),

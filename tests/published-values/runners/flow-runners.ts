@@ -9,6 +9,12 @@ import {
   turnoversToFraction,
 } from '../../../shared/domain/water/flow/wash-out.ts'
 import { wellMixedConcentration } from '../../../shared/domain/water/flow/well-mixed-concentration.ts'
+import { evaporationTopUp } from '../../../shared/domain/water/salinity-change/evaporation.ts'
+import {
+  saltMassByBalance,
+  saltMassSimple,
+  saltMassWithMoisture,
+} from '../../../shared/domain/water/salinity-change/salt-mass.ts'
 import { stepwiseDays, stepwiseSchedule } from '../../../shared/domain/water/salinity-change/stepwise.ts'
 import {
   continuousExchangeLitres,
@@ -162,6 +168,46 @@ export const flowRunners: Readonly<Record<string, Runner>> = {
     const plan = steps(inputs)
     return plan.ok ? ok({ value: plan.value.map((step) => step.swapLitres) }) : plan
   },
+  salt_mass_simple_kg: (inputs) =>
+    figure(
+      saltMassSimple({
+        systemLitres: numberOf(inputs, 'system_volume_L'),
+        startGPerL: numberOf(inputs, 'start_salinity_g_per_L'),
+        targetGPerL: numberOf(inputs, 'target_salinity_g_per_L'),
+      }),
+      same,
+      {},
+    ),
+  salt_mass_by_mass_balance_kg: (inputs) =>
+    figure(
+      saltMassByBalance({
+        systemLitres: numberOf(inputs, 'system_volume_L'),
+        startGPerKg: numberOf(inputs, 'start_salinity_g_per_kg'),
+        targetGPerKg: numberOf(inputs, 'target_salinity_g_per_kg'),
+        temperatureC: numberOf(inputs, 'temp_t90_C'),
+      }),
+      same,
+      {},
+    ),
+  salt_mass_with_moisture_kg: (inputs) =>
+    figure(
+      saltMassWithMoisture({
+        anhydrousKg: numberOf(inputs, 'anhydrous_salt_kg'),
+        purityPercent: numberOf(inputs, 'salt_purity_percent'),
+      }),
+      same,
+      {},
+    ),
+  evaporation_topup_L: (inputs) =>
+    figure(
+      evaporationTopUp({
+        systemLitres: numberOf(inputs, 'system_volume_L'),
+        readingSalinity: numberOf(inputs, 'reading_salinity'),
+        targetSalinity: numberOf(inputs, 'target_salinity'),
+      }),
+      same,
+      {},
+    ),
   injection_volume_mL: (inputs) => {
     const volume = injection(inputs)
     if (!volume.ok || !('graduation_mL' in inputs)) return figure(volume, same, injectionNames)

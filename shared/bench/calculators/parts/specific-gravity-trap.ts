@@ -4,7 +4,7 @@ import { readsAsSpecificGravity } from '../../../domain/seawater/specific-gravit
 /** The words of the refusal below. */
 export const specificGravityWords = {
   'refusal.specific-gravity-as-salinity':
-    'This looks like a specific gravity. A salinity of sea water is about 35; one near 1 is typed to a tenth.',
+    'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
 } as const
 
 /** @refuses specific-gravity-as-salinity for the reading of a hydrometer in a field of salinity */
