@@ -4,6 +4,7 @@ import * as animalRecords from './animal-records.contract.ts'
 import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
 import { askUnknownCalculator, benchContracts, listCalculators, printBenchSheet } from './bench.contract.ts'
+import * as benchQuestions from './bench-questions.contract.ts'
 import * as caseEvents from './case-events.contract.ts'
 import * as clearance from './clearance.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
@@ -65,7 +66,7 @@ const modules = [
   handover,
   today,
   find,
-  { listCalculators, ...benchContracts, askUnknownCalculator, printBenchSheet },
+  { listCalculators, ...benchContracts, ...benchQuestions, askUnknownCalculator, printBenchSheet },
 ]
 
 const isContract = (value: unknown): value is Contract =>

@@ -7,10 +7,13 @@ import {
   listCalculators,
   printBenchSheet,
 } from '../../../shared/contracts/bench.contract.ts'
+import { askConnectedWater, askQuarantineClock } from '../../../shared/contracts/bench-questions.contract.ts'
 import { benchWords } from '../../../shared/messages/bench.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
+import { answerConnectedWater } from './connected-water.ts'
+import { answerQuarantineClock } from './quarantine-clock.ts'
 import type { PrintBenchSheet } from './print-sheet.ts'
 import { answerOf, presentAnswer, presentSource } from './answer.ts'
 
@@ -33,6 +36,8 @@ export function benchRoutes(print: PrintBenchSheet): Route[] {
     ...calculatorContracts.map(({ of, contract }) =>
       route(contract, async ({ body }) => presentAnswer(of, await answerOf(of, body))),
     ),
+    route(askQuarantineClock, async ({ body }) => answerQuarantineClock(body)),
+    route(askConnectedWater, async ({ body }) => answerConnectedWater(body)),
     route(printBenchSheet, async ({ params, body, context }) => {
       const of = calculatorAt(params.calculator)
       if (!of) throw new Problem('not-found', { detail: benchWords.noSuch })

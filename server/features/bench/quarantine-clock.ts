@@ -1,0 +1,125 @@
+import type { askQuarantineClock } from '../../../shared/contracts/bench-questions.contract.ts'
+import type { BodyOf, ReplyOf } from '../../../shared/contracts/contract.ts'
+import type { CaseClock } from '../../../shared/domain/quarantine/case-clock.ts'
+import type { ClockEvent } from '../../../shared/domain/quarantine/clock-event.ts'
+import { defaultClockPolicy, type ClockPolicy } from '../../../shared/domain/quarantine/clock-policy.ts'
+import { computeClock } from '../../../shared/domain/quarantine/compute-clocks.ts'
+import { addDays, isZone } from '../../../shared/domain/time/facility-date.ts'
+import { instantToMs, msToInstant } from '../../../shared/domain/time/instant-arithmetic.ts'
+import { startOfFacilityDay } from '../../../shared/domain/time/local-time.ts'
+import { benchQuestionWords } from '../../../shared/messages/bench-questions.ts'
+import { sayClockReason, type ClockWords } from '../../../shared/messages/say-clock-reason.ts'
+import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { sayUnmet } from '../../../shared/messages/say-unmet.ts'
+import { refused } from './refused.ts'
+
+type Asked = BodyOf<typeof askQuarantineClock>
+
+const caseId = 'batch'
+
+/**
+ * The clock of one batch, from what is said about it and nothing else.
+ *
+ * @throws Problem not-computable: unknown-zone, duplicate-event, sample-taken-after-report
+ */
+export function answerQuarantineClock(asked: Asked): ReplyOf<typeof askQuarantineClock> {
+  const { zone, quarantineKind } = asked
+  if (!isZone(zone)) throw refused('/zone', 'unknown-zone', benchQuestionWords.unknownZone)
+  const policy: ClockPolicy = { ...defaultClockPolicy, ...asked.policy }
+  const events = asked.events.map((event, index) => ({
+    ...event,
+    caseId,
+    eventId: event.eventId ?? String(index + 1),
+  })) as ClockEvent[]
+  const names = new Set<string>()
+  for (const [index, { eventId }] of events.entries()) {
+    if (names.has(eventId))
+      throw refused(`/events/${index}/eventId`, 'duplicate-event', benchQuestionWords.duplicateEvent)
+    names.add(eventId)
+  }
+  const question = {
+    cases: [{ caseId, quarantineKind, policy }],
+    events,
+    asOf: asked.asOf.includes('T') ? asked.asOf : endOfDay(asked.asOf, zone),
+    zone,
+  }
+  const clock = computeClock(question, caseId)
+  if (clock.ok) return presentClock(clock.value, zone, policy)
+  const { code, field, params } = clock.refusal
+  const at = events.findIndex(({ eventId }) => eventId === params?.eventId)
+  const pointer = at < 0 ? `/${field ?? ''}` : `/events/${at}`
+  throw refused(
+    pointer,
+    code,
+    code === 'sample-taken-after-report'
+      ? benchQuestionWords.sampleTakenAfterReport
+      : benchQuestionWords.notUnderstood,
+  )
+}
+
+const endOfDay = (date: string, zone: string) =>
+  msToInstant(instantToMs(startOfFacilityDay(addDays(date, 1), zone)) - 1)
+
+function presentClock(
+  clock: CaseClock,
+  zone: string,
+  policy: ClockPolicy,
+): ReplyOf<typeof askQuarantineClock> {
+  const words: ClockWords = {
+    date: sayDate,
+    instant: (at) => sayInstantWithOffset(at, zone),
+    caseName: (id) => id,
+    criterionName: (id) => id,
+    testName: (key) => key,
+  }
+  const { legs, locks, pauses, extensions, unmet, reasons } = clock
+  return {
+    status: clock.status,
+    asOfOn: clock.asOfOn,
+    day0On: clock.day0On,
+    dayNumber: clock.dayNumber,
+    requiredDays: clock.requiredDays,
+    pausedMinutes: clock.pausedMinutes,
+    pausedDays: clock.pausedDays,
+    earliestClearanceOn: clock.earliestClearanceOn,
+    earliestIfUnlockedOn: clock.earliestIfUnlockedOn,
+    legs: legs.map(({ day0On, startedByEventId, endedByEventId, endedOn, daysRun }) => ({
+      day0On,
+      startedByEventId,
+      endedByEventId,
+      endedOn,
+      daysRun,
+    })),
+    holds: [
+      ...locks
+        .filter(({ liftedAt }) => liftedAt === null)
+        .map(({ eventId, cause, from }) => ({ eventId, kind: 'lock' as const, cause, from })),
+      ...pauses
+        .filter(({ until }) => until === null)
+        .map(({ eventId, cause, from }) => ({ eventId, kind: 'pause' as const, cause, from })),
+    ],
+    extensions: extensions.map(({ eventId, kind, fromOn, untilOn, provisional, state }) => ({
+      eventId,
+      kind,
+      fromOn,
+      untilOn,
+      provisional,
+      state,
+    })),
+    unmet: unmet.map(({ code, params, overridable }) => ({
+      code,
+      params,
+      overridable,
+      text: sayUnmet({ code, params }, words),
+    })),
+    reasons: reasons.map((reason) => ({
+      code: reason.code,
+      eventId: reason.eventId,
+      at: reason.at,
+      standing: reason.standing,
+      params: { ...reason.params },
+      text: sayClockReason(reason, words),
+    })),
+    policy: { ...policy, criteria: [...policy.criteria] },
+  }
+}
