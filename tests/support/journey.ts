@@ -62,7 +62,7 @@ export async function expectSound(page: Page, name: string): Promise<void> {
   await picture(page, name)
   // what stands at the foot of a phone lies over what can be scrolled clear of it; at the end of the page it lies over nothing
   await page.evaluate(() => {
-    if (document.querySelector('.bench-bar')) window.scrollTo(0, document.documentElement.scrollHeight)
+    if (document.querySelector('.bench-bar')) scrollTo(0, document.documentElement.scrollHeight)
   })
   await expectAccessible(page, name)
   const [width, window] = await page.evaluate(() => [document.documentElement.scrollWidth, innerWidth])
