@@ -1,9 +1,13 @@
 import { ammoniaForms } from './calculators/ammonia-forms.ts'
 import { barometricPressure } from './calculators/barometric-pressure.ts'
 import { bathDose } from './calculators/bath-dose.ts'
+import { bleachSolution } from './calculators/bleach-solution.ts'
+import { contactTime } from './calculators/contact-time.ts'
+import { copperByAlkalinityCalculator } from './calculators/copper-by-alkalinity.ts'
+import { copperSulfate } from './calculators/copper-sulfate.ts'
+import { dechlorination } from './calculators/dechlorination.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
-import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { evaporation } from './calculators/evaporation.ts'
 import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
@@ -13,6 +17,7 @@ import { lengthWeight } from './calculators/length-weight.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
+import { ozoneDose } from './calculators/ozone-dose.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { saltMass } from './calculators/salt-mass.ts'
@@ -20,6 +25,7 @@ import { specificGravity } from './calculators/specific-gravity.ts'
 import { seawaterDensity } from './calculators/seawater-density.ts'
 import { stockSolution } from './calculators/stock-solution.ts'
 import { tankVolume } from './calculators/tank-volume.ts'
+import { tricaineBath } from './calculators/tricaine-bath.ts'
 import { turnover } from './calculators/turnover.ts'
 import { unionisedAmmoniaCalculator } from './calculators/unionised-ammonia.ts'
 import { unitConversion } from './calculators/unit-conversion.ts'
@@ -31,11 +37,13 @@ import type { AnyCalculator } from './definition.ts'
 export const calculators: readonly AnyCalculator[] = [
   bathDose,
   copperSulfate,
+  copperByAlkalinityCalculator,
   makeUpDose,
   concentrationReached,
   stockSolution,
   flowThroughBath,
   injection,
+  tricaineBath,
   unionisedAmmoniaCalculator,
   specificGravity,
   tankVolume,
@@ -54,6 +62,10 @@ export const calculators: readonly AnyCalculator[] = [
   seawaterDensity,
   freezingPoint,
   barometricPressure,
+  dechlorination,
+  bleachSolution,
+  contactTime,
+  ozoneDose,
   unitConversion,
   ammoniaForms,
 ]

@@ -228,6 +228,25 @@ export const sources = {
       'Common practice, no source: two parts of bicarbonate to one of tricaine; less in hard or salt water, by the measured pH',
     mark: 'M',
   },
+  'mass-balance': {
+    citation: 'Balance of mass: what is put in is what is there; computed',
+    mark: 'C',
+  },
+  'bleach-practice': {
+    citation:
+      'Common practice, no source: bleach weakens with age, dirt uses chlorine up, and acid, ammonia and formalin are kept away from it',
+    mark: 'M',
+  },
+  'ozone-practice': {
+    citation:
+      'Common practice, no source: ozone in sea water makes bromine and bromate, so total residual oxidants are measured',
+    mark: 'M',
+  },
+  'allometric-scaling': {
+    citation:
+      'Allometric scaling of a dose by body mass to the power of 0.75, for information only, from memory',
+    mark: 'M',
+  },
   'epa-contact-time': {
     citation: 'US EPA disinfection profiling guidance, baffling factors, from memory',
     mark: 'M',

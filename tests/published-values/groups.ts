@@ -17,6 +17,7 @@ import { publishedCases, type PublishedCase, type Runner } from './published-cas
 import { ammoniaRunners } from './runners/ammonia-runners.ts'
 import { anaesthesiaRunners } from './runners/anaesthesia-runners.ts'
 import { copperRunners } from './runners/copper-runners.ts'
+import { disinfectionRunners } from './runners/disinfection-runners.ts'
 import { growthRunners } from './runners/growth-runners.ts'
 import { injectionFeedRunners } from './runners/injection-feed-runners.ts'
 import { neutralisationRunners } from './runners/neutralisation-runners.ts'
@@ -57,6 +58,7 @@ const runnerMaps: readonly Readonly<Record<string, Runner>>[] = [
   seawaterRunners,
   anaesthesiaRunners,
   copperRunners,
+  disinfectionRunners,
   growthRunners,
   injectionFeedRunners,
   neutralisationRunners,

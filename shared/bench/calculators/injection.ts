@@ -12,6 +12,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution } from '../definition.ts'
 import { quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { strengthTerm } from './parts/strength-term.ts'
 
 const mostErrorPercent = 5
 const gramsPerKilogram = 1000
@@ -40,8 +41,7 @@ export const injection = defineCalculator({
     'result.error': 'Rounding makes of the dose',
     'line.drug': 'Drug needed',
     'line.volume': 'Volume, unrounded',
-    'line.given': 'Drug in the rounded volume',
-    'line.error': 'Error of the rounding',
+    'line.share': 'The rounded volume in per cent of the unrounded one',
     'refusal.below-half-graduation':
       'The volume is less than half of the smallest step of this syringe. Dilute the solution, or take a finer syringe.',
     'caution.dilute': (p: { least: string; parts: string }) =>
@@ -108,7 +108,7 @@ export const injection = defineCalculator({
       line('drug', `${enteredTerm(dose)} * ${enteredTerm(weight)} to mg`, milligrams, 'mg'),
       line(
         'volume',
-        `${valueTerm(milligrams, 'mg')} / (${strengthTerm(strength.entered.unit, strength.entered.value, enteredTerm(strength))}) to mL`,
+        `${valueTerm(milligrams, 'mg')} / (${strengthTerm(strength)}) to mL`,
         millilitres,
         'mL',
         ['drug'],
@@ -146,9 +146,9 @@ export const injection = defineCalculator({
       working: [
         ...working,
         line(
-          'error',
-          `(${takenTerm} / (${valueTerm(millilitres, 'mL')}) - 1) * 100`,
-          errorPercent,
+          'share',
+          `${takenTerm} / (${valueTerm(millilitres, 'mL')}) * 100`,
+          (taken / inStep.value) * 100,
           'percent',
           ['volume'],
         ),
@@ -157,8 +157,3 @@ export const injection = defineCalculator({
     })
   },
 })
-
-/** A percentage stands as a plain number in an expression: 2.27 % w/v is 2.27 g in 100 mL. */
-function strengthTerm(unit: string, value: string, term: string): string {
-  return unit === 'percent_w_v' ? `${value} g / (100 mL)` : term
-}

@@ -220,7 +220,7 @@ function mixingOf(
     const perTonne = premixKgPerTonne(asked)
     if (!perTonne.ok) return perTonne
     const share = `(${enteredTerm(premix)} / 100)`
-    figures.push({ key: 'per-tonne', value: perTonne.value, unit: 'kg' })
+    figures.push({ key: 'per-tonne', value: perTonne.value, unit: 'kg', kind: 'dose' })
     working.push(
       line('per-tonne', `${strength} * 1 tonne / ${share} to kg`, perTonne.value, 'kg', ['strength']),
     )
@@ -257,7 +257,7 @@ function dayOf(
   const mass = enteredTerm(biomass)
   const part: Part = {
     figures: [
-      { key: 'drug-day', value: drug.value, unit: 'mg' },
+      { key: 'drug-day', value: drug.value, unit: 'mg', kind: 'dose' },
       { key: 'feed-day', value: eaten.value, unit: 'kg' },
     ],
     working: [

@@ -11,6 +11,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { specificGravityWords } from './parts/specific-gravity-trap.ts'
 import { volumeUnits } from './parts/volume-input.ts'
 
 const salinity = (more: object = {}) =>
@@ -57,8 +58,7 @@ export const salinityChange = defineCalculator({
     'line.day': (p: { day: string }) => `Day ${p.day}`,
     'line.sum': 'Water to swap in all',
     'line.through': 'Water to run through',
-    'refusal.specific-gravity-as-salinity':
-      'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
+    ...specificGravityWords,
     'refusal.target-beyond-replacement':
       'A swap goes no further than the salinity of the replacement water, and a flow does not quite reach it. Check the three salinities, or take other water.',
     'refusal.target-behind-start':

@@ -16,6 +16,7 @@ import { defineCalculator, type BenchLine, type Figure } from '../definition.ts'
 import { quantity } from '../inputs.ts'
 import { line } from '../line.ts'
 import { temperature68Line } from './parts/practical-salinity-lines.ts'
+import { perHalfExpression, perSalinityExpression, pureExpression } from './parts/seawater-density-lines.ts'
 import { refuseSpecificGravity, specificGravityWords } from './parts/specific-gravity-trap.ts'
 import { volumeUnits } from './parts/volume-input.ts'
 
@@ -146,23 +147,9 @@ function densityLines(salinity: ParsedQuantity, temperature: ParsedQuantity, den
   const [w, a, b] = [valueTerm(pure, 'kg/m3'), valueTerm(each, 'kg/m3'), valueTerm(half, 'kg/m3')]
   return [
     temperature68Line(enteredTerm(temperature), t68),
-    line(
-      'pure',
-      `(999.842594 + 0.06793952 * ${t} - 0.00909529 * ${t}^2 + 0.0001001685 * ${t}^3 - 0.000001120083 * ${t}^4 + 6.536332e-9 * ${t}^5) * 1 kg/m3`,
-      pure,
-      'kg/m3',
-      ['t68'],
-    ),
-    line(
-      'per-salinity',
-      `(0.824493 - 0.0040899 * ${t} + 0.000076438 * ${t}^2 - 8.2467e-7 * ${t}^3 + 5.3875e-9 * ${t}^4) * 1 kg/m3`,
-      each,
-      'kg/m3',
-      ['t68'],
-    ),
-    line('per-half', `(-0.00572466 + 0.00010227 * ${t} - 0.0000016546 * ${t}^2) * 1 kg/m3`, half, 'kg/m3', [
-      't68',
-    ]),
+    line('pure', `(${pureExpression(t)}) * 1 kg/m3`, pure, 'kg/m3', ['t68']),
+    line('per-salinity', `(${perSalinityExpression(t)}) * 1 kg/m3`, each, 'kg/m3', ['t68']),
+    line('per-half', `(${perHalfExpression(t)}) * 1 kg/m3`, half, 'kg/m3', ['t68']),
     line(
       'density',
       `${w} + ${a} * ${s} + ${b} * ${s} * sqrt(${s}) + 0.00048314 kg/m3 * ${s}^2`,

@@ -31,6 +31,9 @@ export function injectionVolume(input: {
   return refused ?? finiteOrRefuse((doseMgPerKg * weightKg) / strengthMgPerMl, 'strengthMgPerMl')
 }
 
+/** Below this the difference is of the binary form, not of the rounding. */
+const leastErrorPercent = 1e-9
+
 export interface RoundedInjection {
   /** As the syringe shows it, with the places of its graduation. */
   text: string
@@ -45,6 +48,7 @@ export interface RoundedInjection {
  * @param volumeMl     above 0
  * @param graduationMl the syringe's smallest step as printed on it: "0.01"
  * @refuses not-finite · not-above-zero · below-half-graduation (graduationMl) where nothing would be left of it: dilute
+ * @returns an error of 0 where the volume is a whole number of steps
  * @source  check values injr.*, inje.*, inj.refuse3
  */
 export function roundInjection(
@@ -61,7 +65,10 @@ export function roundInjection(
   if (!rounded.ok) return refuse('not-finite', 'volumeMl')
   const millilitres = Number(rounded.value)
   if (millilitres === 0) return refuse('below-half-graduation', 'graduationMl')
-  return ok({ text: rounded.value, millilitres, errorPercent: 100 * (millilitres / volumeMl - 1) })
+  const errorPercent = 100 * (millilitres / volumeMl - 1)
+  // 0.4 × 12 ÷ 5 is 0.96 but for its last binary digit, which is no error of a syringe
+  const isWhole = Math.abs(errorPercent) < leastErrorPercent
+  return ok({ text: rounded.value, millilitres, errorPercent: isWhole ? 0 : errorPercent })
 }
 
 /** Fewer graduations than this make too large an error. @source injection-practice */

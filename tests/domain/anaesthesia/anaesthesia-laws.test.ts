@@ -6,6 +6,7 @@ import {
   nominalBathConcentration,
 } from '../../../shared/domain/anaesthesia/bath-concentration.ts'
 import { bufferMass } from '../../../shared/domain/anaesthesia/buffer-mass.ts'
+import { stockMass } from '../../../shared/domain/anaesthesia/stock-mass.ts'
 import { stockVolumeInBath, stockVolumeOnTop } from '../../../shared/domain/anaesthesia/stock-volume.ts'
 import { between, expectNear, expectTotal, refusalOf, valueOf } from '../../support/engine-laws.ts'
 
@@ -63,6 +64,16 @@ describe('laws of a tricaine bath', () => {
     )
   })
 
+  it('puts into a finished bath just what its target says', () => {
+    fc.assert(
+      fc.property(baths, ({ targetMgPerL, litres, stockGPerL }) => {
+        const stockMl = valueOf(stockVolumeInBath({ targetMgPerL, bathLitres: litres, stockGPerL }))
+        expectNear(valueOf(stockMass({ stockGPerL, stockMl })) * 1000, targetMgPerL * litres)
+      }),
+    )
+    expect(refusalOf(stockMass({ stockGPerL: 10, stockMl: 0 }))).toEqual(['not-above-zero', 'stockMl'])
+  })
+
   it('buffers twice as much with twice as much', () => {
     fc.assert(
       fc.property(between(0.1, 10_000), between(0.1, 5), (tricaineG, bicarbonateRatio) => {
@@ -97,6 +108,7 @@ describe('laws of a tricaine bath', () => {
     expectTotal([
       [stockVolumeInBath, ['targetMgPerL', 'bathLitres', 'stockGPerL']],
       [stockVolumeOnTop, ['targetMgPerL', 'waterLitres', 'stockGPerL']],
+      [stockMass, ['stockGPerL', 'stockMl']],
       [bufferMass, ['tricaineG', 'bicarbonateRatio']],
       [nominalBathConcentration, mix],
       [exactBathConcentration, mix],

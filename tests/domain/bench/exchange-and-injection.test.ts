@@ -119,6 +119,15 @@ describe('an injection', () => {
     expect(cautions.find((one) => one.code === 'dilute')?.params).toMatchObject({ parts: 6 })
     expect(cautions.map((one) => one.code)).toContain('rounding')
   })
+  it('says no error where the volume is a whole number of steps, whatever its binary form', async () => {
+    // check value inj.04: 0.96 mL (computed); in binary 0.4 × 12 ÷ 5 is not 0.96
+    const whole = { dose: '0.4 mg/kg', weight: '12 kg', strength: '5 mg/mL' }
+    for (const change of [whole, { ...whole, weight: '11.1 kg', dose: '0.3 mg/kg', strength: '3.7 mg/mL' }]) {
+      const { figures, cautions } = await ask('injection', { ...given, ...change })
+      expect(figures[3]).toMatchObject({ key: 'error', value: 0, rounded: '0' })
+      expect(cautions.map((one) => one.code)).not.toContain('rounding')
+    }
+  })
   it('rounds halves up in decimal', async () => {
     const half = { dose: '1 mg/kg', weight: '1.005 kg', strength: '1 mg/mL' }
     expect((await ask('injection', { ...given, ...half })).figures[0].rounded).toBe('1.01')

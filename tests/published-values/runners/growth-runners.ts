@@ -1,3 +1,4 @@
+import { allometricDose } from '../../../shared/domain/dose/allometric-dose.ts'
 import {
   coefficientInUnits,
   type CoefficientUnits,
@@ -53,4 +54,15 @@ export const growthRunners: Readonly<Record<string, Runner>> = {
     figure(conditionFactorFromEnglish({ cLbPerIn3: numberOf(inputs, 'C_lb_per_in3') }), Number, {}),
   a_from_other_units: (inputs) =>
     figure(coefficientInUnits({ ...coefficients(inputs), ...unitsOf(inputs.to) }), Number, names),
+  allometric_dose_mg: (inputs) =>
+    figure(
+      allometricDose({
+        referenceDoseMgPerKg: numberOf(inputs, 'reference_dose_mg_per_kg'),
+        referenceWeightKg: numberOf(inputs, 'reference_weight_kg'),
+        targetWeightKg: numberOf(inputs, 'target_weight_kg'),
+        exponent: numberOf(inputs, 'exponent'),
+      }),
+      ({ doseMg }) => doseMg,
+      {},
+    ),
 }

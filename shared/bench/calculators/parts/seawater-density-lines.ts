@@ -22,6 +22,13 @@ export const densityLineWords = {
 export const pureExpression = (t: string) =>
   `999.842594 + 0.06793952 * ${t} - 0.00909529 * ${t}^2 + 0.0001001685 * ${t}^3 - 0.000001120083 * ${t}^4 + 0.000000006536332 * ${t}^5`
 
+/** A, for each unit of salinity, likewise. */
+export const perSalinityExpression = (t: string) =>
+  `0.824493 - 0.0040899 * ${t} + 0.000076438 * ${t}^2 - 0.00000082467 * ${t}^3 + 0.0000000053875 * ${t}^4`
+
+/** B, for the power of 1.5, likewise. */
+export const perHalfExpression = (t: string) => `-0.00572466 + 0.00010227 * ${t} - 0.0000016546 * ${t}^2`
+
 /**
  * The density of sea water in five lines, from a practical salinity that an earlier line has: ρw, A, B and ρ, as plain
  * numbers in kg/m³.
@@ -38,14 +45,8 @@ export function densityLines(salinity: number, salinityKey: string, temperatureC
   return [
     line('t68', `1.00024 * ${valueTerm(temperatureC, 'degC')}`, t, 'degC'),
     line('pure', pureExpression(tt), pure, 'ratio', ['t68']),
-    line(
-      'a',
-      `0.824493 - 0.0040899 * ${tt} + 0.000076438 * ${tt}^2 - 0.00000082467 * ${tt}^3 + 0.0000000053875 * ${tt}^4`,
-      a,
-      'ratio',
-      ['t68'],
-    ),
-    line('b', `-0.00572466 + 0.00010227 * ${tt} - 0.0000016546 * ${tt}^2`, b, 'ratio', ['t68']),
+    line('a', perSalinityExpression(tt), a, 'ratio', ['t68']),
+    line('b', perHalfExpression(tt), b, 'ratio', ['t68']),
     line(
       'density',
       `${number(pure)} + ${number(a)} * ${s} + ${number(b)} * ${s}^1.5 + 0.00048314 * ${s}^2`,
