@@ -17,6 +17,13 @@ export interface RefusalWords {
   said: (key: string) => string
 }
 
+/** The limit with its unit; a plain number has none to check. */
+function withLimit({ said, unit }: RefusalWords): string {
+  return unit === ''
+    ? `${said('limit')}. Check the number.`
+    : `${said('limit')} ${unit}. Check the number and its unit.`
+}
+
 /** What to do when a typed number or unit is not taken: one plain sentence or two for each code. */
 export const numberRefusals = defineMessages({
   blank: (p) => `Type ${p.what}${p.inUnit}${p.example}.`,
@@ -49,8 +56,6 @@ export const numberRefusals = defineMessages({
   'dimensions-differ': (p) => `${p.What} cannot be given in this unit. Choose a unit from the list.`,
   'below-absolute-zero': (p) => `${p.What} is below absolute zero. Check the sign and the unit.`,
   'not-above-zero': (p) => `Type ${p.what} as more than zero${p.example}.`,
-  'below-least': (p) =>
-    `${p.What} has to be at least ${p.said('limit')} ${p.unit}. Check the number and its unit.`,
-  'above-most': (p) =>
-    `${p.What} has to be at most ${p.said('limit')} ${p.unit}. Check the number and its unit.`,
+  'below-least': (p) => `${p.What} has to be at least ${withLimit(p)}`,
+  'above-most': (p) => `${p.What} has to be at most ${withLimit(p)}`,
 } satisfies Record<QuantityRefusal, (p: RefusalWords) => string>)

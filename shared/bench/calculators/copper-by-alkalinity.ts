@@ -108,7 +108,7 @@ export const copperByAlkalinityCalculator = defineCalculator({
     { code: 'volume', level: 'note' },
   ],
   plot: { vary: 'alkalinity', unit: 'mg/L_CaCO3', from: 50, to: 400, figure: 'sulfate' },
-  carries: [{ to: 'order' }],
+  carries: [{ to: 'order', division: 'division' }],
   published: [
     'alkalinity_rule_copper_sulfate_mg_per_L',
     'alkalinity_rule_cu_mg_per_L',

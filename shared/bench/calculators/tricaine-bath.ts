@@ -91,7 +91,7 @@ export const tricaineBath = defineCalculator({
     'caution.plane-sedation': 'The veterinarian means this bath for sedation, by what was chosen.',
     'caution.plane-surgery': 'The veterinarian means this bath for anaesthesia, by what was chosen.',
     'caution.plane-euthanasia':
-      'By what was chosen this bath is meant to kill. Keep it apart from every other bath, and mark it.',
+      'By what was chosen this bath is meant to kill. Mark it, and keep it apart from every other. An animal that lies still may be alive: the veterinarian says how its death is confirmed.',
     'caution.finished-bath': 'The volume is that of the finished bath, with the stock in it.',
     'caution.water-before':
       'The volume is that of the water before the stock goes in; the bath becomes larger by the stock.',
@@ -228,8 +228,12 @@ export const tricaineBath = defineCalculator({
     }
     if (!volume) return refuse('blank', 'volume', { unit: 'L' })
     const before: BenchCaution[] = [
-      { code: `plane-${String(plane)}`, level: plane === 'euthanasia' ? 'warning' : 'note' },
-      { code: 'observe', level: 'warning' },
+      ...(plane === 'euthanasia'
+        ? [{ code: 'plane-euthanasia', level: 'warning' } as const]
+        : [
+            { code: `plane-${String(plane)}`, level: 'note' } as const,
+            { code: 'observe', level: 'warning' } as const,
+          ]),
     ]
     if (find === 'reached' && poured) {
       const reached = reachedBy(strength, poured, volume)

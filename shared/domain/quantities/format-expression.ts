@@ -47,15 +47,18 @@ export function formatExpression(expression: string, earlier?: ReadonlySet<strin
     .replace(needlessBrackets, '$1')
     .replace(exponentBrackets, '^$1')
   let text = ''
+  // "1 day", "2 days": the number that a unit stands behind
+  let before: string | undefined
   for (const match of shown.matchAll(token)) {
     const { number, name, power, sign, other } = match.groups ?? {}
     if (number !== undefined)
       text += earlier === undefined || earlier.has(number) ? shownNumber(number) : allDigits(number)
-    else if (name !== undefined) text += shownName(name)
+    else if (name !== undefined) text += shownName(name, before === '1')
     else if (power !== undefined) text += powers[power] ?? power
     else if (sign !== undefined) text += `${noBreakSpace}${signs[sign.trim()]} `
     else if (other === ' ') text += noBreakSpace
     else text += other === '-' ? minusSign : other
+    if (other !== ' ') before = number
   }
   return text
 }
@@ -72,7 +75,9 @@ function shownNumber(text: string): string {
   return groupThousands(withoutTrailingZeros(fixedPlaces(Number(text), places)))
 }
 
-function shownName(name: string): string {
+function shownName(name: string, one: boolean): string {
   const code = unitByName.get(name)
-  return code === undefined ? (constants[name] ?? functions[name] ?? name) : unitOf(code).symbol
+  if (code === undefined) return constants[name] ?? functions[name] ?? name
+  const { symbol, symbolOfOne } = unitOf(code)
+  return one && symbolOfOne !== undefined ? symbolOfOne : symbol
 }

@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useState } from 'react'
+import { useDeferredValue, useMemo, useRef, useState } from 'react'
 import { Link, useLocation } from 'react-router-dom'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate } from '../../../shared/bench/evaluate.ts'
@@ -16,6 +16,8 @@ import { InputFields } from './input-fields.tsx'
 import { BenchPlot } from './plot.tsx'
 import { PrintButton } from './print-button.tsx'
 import { rememberedUnits } from './remembered-units.ts'
+import { ResultBar } from './result-bar.tsx'
+import { ResultSaid } from './result-said.tsx'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
 
@@ -28,6 +30,7 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   // the curve asks the calculator dozens of times: it follows once the figure stands
   const drawnBody = useDeferredValue(body)
   const water = useEnclosureWater(of, setDraft, enclosureLeft(state))
+  const result = useRef<HTMLElement>(null)
   const untouched = isUntouched(draft)
   const startAgain = (next: Draft) => {
     water.forget()
@@ -72,9 +75,11 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
           wrong={wrong}
           noteOf={(name) => water.note(name, draft[name])}
         />
+        {untouched ? null : <ResultBar of={of} evaluation={evaluation} result={result} />}
       </Area>
       <Area className="bench-result">
-        <section className="net-volume" aria-live="polite" aria-label={words.result}>
+        <ResultSaid of={of} evaluation={evaluation} untouched={untouched} />
+        <section ref={result} tabIndex={-1} className="net-volume" aria-label={words.result}>
           <h2 className="t-label">{words.result}</h2>
           {evaluation.ok ? (
             <ResultFigures of={of} answer={evaluation.answer} />

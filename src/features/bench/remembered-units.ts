@@ -15,6 +15,8 @@ export function rememberedUnits(): RememberedUnits {
 /** Remembers the unit of one input. */
 export function rememberUnit(key: string, unit: string): void {
   try {
+    // every key that is typed comes by here
+    if (rememberedUnits()[key] === unit) return
     localStorage.setItem(storeKey, JSON.stringify({ ...rememberedUnits(), [key]: unit }))
   } catch {
     // a full or shut store: the unit is asked for again next time

@@ -88,6 +88,7 @@ describe('a tricaine bath', () => {
   it('says with a warning that a bath kills', async () => {
     const warnings = await warningsOf('tricaine-bath', { ...given, plane: 'euthanasia', target: '500 mg/L' })
     expect(warnings.join(' ')).toMatch(/kill/)
+    expect(warnings.join(' ')).not.toMatch(/breathing/)
     expect(await codesOf('tricaine-bath', { ...given, target: '2000 mg/L' })).toContain('not-plausible')
   })
   it.each([

@@ -40,6 +40,17 @@ describe('a refused number', () => {
     expect(sayNumberRefusal(blank.refusal, 'the width of the second sump')).toContain('the second sump')
   })
 
+  it('says a limit of a plain number without a unit', () => {
+    const refusal = { code: 'above-most', field: 'b', params: { limit: '4', unit: 'ratio' } } as const
+    expect(sayNumberRefusal(refusal, 'the exponent')).toBe(
+      'The exponent has to be at most 4. Check the number.',
+    )
+    const least = { ...refusal, code: 'below-least' } as const
+    expect(sayNumberRefusal(least, 'the exponent')).toBe(
+      'The exponent has to be at least 4. Check the number.',
+    )
+  })
+
   it('gives every sentence as safe writing that ends in a full stop', () => {
     const codes = [
       ...['blank', 'not-a-number', 'two-separators', 'thousands-or-decimal', 'too-long', 'unit-missing'],

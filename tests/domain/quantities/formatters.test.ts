@@ -210,6 +210,11 @@ describe('working', () => {
     expect(seen(formatExpression(expression))).toBe(expected)
   })
 
+  it('writes one of something in the singular', () => {
+    expect(seen(formatExpression('400 g / (0.1 kg) * 1 day to day'))).toBe('400~g~÷ 0.1~kg~× 1~day')
+    expect(seen(formatExpression('21 day * 1.0 ug / 1 ug'))).toBe('21~days~× 1.0~micrograms~÷ 1~microgram')
+  })
+
   it.each([
     ['water-rectangular', 1958.4, 'L', '1,958.4~L', 'volume'],
     ['water-pipe', 36.2352, 'L', '36.2~L', 'volume'],
