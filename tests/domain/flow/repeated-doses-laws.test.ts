@@ -39,7 +39,7 @@ describe('a course of doses', () => {
           )
           expect((course.steady?.peakMgPerL ?? 0) / steady.peakMgPerL).toBeCloseTo(1, 9)
           const climbed = (course.steps.at(-1)?.afterMgPerL ?? 0) / steady.peakMgPerL
-        expect(climbed).toBeCloseTo(1 - (course.keptPercent / 100) ** 100, 9)
+          expect(climbed).toBeCloseTo(1 - (course.keptPercent / 100) ** 100, 9)
           for (const step of course.steps)
             expect(step.afterMgPerL).toBeLessThanOrEqual(steady.peakMgPerL * (1 + 1e-9))
         },
