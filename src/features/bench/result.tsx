@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
-import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatCell, formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
 import { sources } from '../../../shared/domain/sources.ts'
 import { benchSheetWords as words, sourceMarks } from '../../../shared/messages/bench-sheet.ts'
@@ -9,15 +9,19 @@ import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
 import { Quantity } from '../../ui/quantity.tsx'
 import { WorkingBlock } from '../../ui/working-block.tsx'
 
+/** More than this does not fit the width of a phone in the size of a dose. */
+const longestLarge = 10
+
 /** The result with its range, and the figures that were worked out with it. */
 export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
   const [result, ...others] = answer.figures
   const ends = answer.range && formatRange(answer.range, result)
+  const shown = formatFigure(result)
   return (
     <>
       <p className="t-label">{say(of, `result.${result.key}`)}</p>
       <p>
-        <Quantity of={formatFigure(result)} size="dose" />
+        <Quantity of={shown} size={shown.text.length > longestLarge ? 'mid' : 'dose'} />
       </p>
       {ends ? (
         <p data-quantity="dose">{words.between({ low: ends.low.text, high: ends.high.text })}</p>
@@ -49,20 +53,14 @@ export function ResultGrounds({
   /** Stands between the working and the sources. */
   children?: ReactNode
 }) {
-  const { working, schedule } = answer
-  const [answered] = answer.figures
-  const at = working.findLastIndex((line) => line.value === answered.value)
-  const resultKey = working[at === -1 ? working.length - 1 : at]?.key
-  const rows = working.map((line) => {
-    const { formula, result } = formatLine(line, working)
-    return {
-      key: line.key,
-      what: sayLine(of, line),
-      formula,
-      result: <Quantity of={result} />,
-      kind: line.key === resultKey ? ('sum' as const) : ('line' as const),
-    }
-  })
+  const { schedule } = answer
+  const rows = formatWorking(answer).map(({ line, formula, result, isResult }) => ({
+    key: line.key,
+    what: sayLine(of, line),
+    formula,
+    result: <Quantity of={result} />,
+    kind: isResult ? ('sum' as const) : ('line' as const),
+  }))
   return (
     <>
       {sortCautions(answer.cautions.map((one) => ({ ...one, text: sayCaution(of, one) }))).map((caution) => (
