@@ -6,6 +6,7 @@ import type { Composition } from './composition.ts'
 import type { Config } from './config.ts'
 import { personOf } from './features/sign-in/index.ts'
 import { poolOf } from './platform/database/data-source.ts'
+import { apiDocsPage } from './platform/api-docs/api-docs-page.ts'
 import { mountRoutes } from './platform/http/mount-routes.ts'
 import { checkOrigin } from './platform/http/origin-check.ts'
 import { openApiDocument } from './platform/http/openapi.ts'
@@ -67,6 +68,10 @@ export function createApp({ config, composition, pages }: AppParts): { app: Expr
   api.get('/openapi.json', (req, res) => {
     if (!personOf(req)) throw new Problem('not-signed-in')
     res.json(openApiDocument())
+  })
+  api.get('/docs', (req, res) => {
+    if (!personOf(req)) throw new Problem('not-signed-in')
+    res.type('html').send(apiDocsPage())
   })
   mountRoutes(api, composition.routes, {
     personOf,

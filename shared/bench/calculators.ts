@@ -15,6 +15,7 @@ import { freezingPoint } from './calculators/freezing-point.ts'
 import { injection } from './calculators/injection.ts'
 import { lengthWeight } from './calculators/length-weight.ts'
 import { makeUpDose } from './calculators/make-up-dose.ts'
+import { measuredVolume } from './calculators/measured-volume.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { ozoneDose } from './calculators/ozone-dose.ts'
@@ -47,6 +48,7 @@ export const calculators: readonly AnyCalculator[] = [
   unionisedAmmoniaCalculator,
   specificGravity,
   tankVolume,
+  measuredVolume,
   washOut,
   waterChanges,
   salinityChange,

@@ -20,7 +20,8 @@ export function bodySchema(of: AnyCalculator): Schema {
 
 function inputSchema(of: AnyCalculator, name: string, input: Input): Schema {
   const help = wordOf(of, `help.${name}`)
-  const description = [say(of, `input.${name}`), ...(help ? [help] : []), ...asked(input)].join('. ')
+  const sentences = [say(of, `input.${name}`), ...(help ? [help.replace(/\.$/, '')] : []), ...asked(input)]
+  const description = sentences.join('. ')
   if (input.kind === 'choice')
     return {
       type: 'string',

@@ -10,6 +10,7 @@ export const benchSheetWords = defineMessages({
   more: (p: { count: number }) => `More: ${counted(p.count, 'calculator', 'calculators')}`,
   noneFound: 'No calculator by these words.',
   missing: 'There is no calculator at this address.',
+  forPrograms: 'For programs: the description of the API',
   back: 'All calculators',
   result: 'Result',
   notYet: 'No figure yet',

@@ -47,6 +47,18 @@ describe('the bench', () => {
     expect((await api.anonymous().post('/api/bench/nothing').send({})).status).toBe(401)
   })
 
+  it('describes itself to people and to programs, once they signed in', async () => {
+    expect((await api.anonymous().get('/api/docs')).status).toBe(401)
+    const page = await (await api.as('registrar')).agent.get('/api/docs')
+    expect(page.status).toBe(200)
+    expect(page.type).toBe('text/html')
+    const machine = await (await api.as('registrar')).agent.get('/api/openapi.json')
+    for (const { id } of calculators) {
+      expect(page.text).toContain(`POST /api/bench/${id}<`)
+      expect(machine.body.paths[`/api/bench/${id}`].post.operationId).toBe(`bench:${id}`)
+    }
+  })
+
   it('answers every example with working, sources and digits', async () => {
     for (const of of calculators) {
       const reply = await ask(of.id, of.example)

@@ -42,6 +42,9 @@ export function CalculatorList({ q }: { q: string }) {
           ))}
         </details>
       ) : null}
+      <p className="t-note no-print">
+        <a href="/api/docs">{words.forPrograms}</a>
+      </p>
     </>
   )
 }
