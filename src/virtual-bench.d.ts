@@ -1,0 +1,16 @@
+/** Made in `vite.config.ts` from the calculators of `shared/bench`. */
+declare module 'virtual:bench' {
+  type Group = import('../shared/bench/groups.ts').BenchGroup
+  type Calculator = import('../shared/bench/definition.ts').AnyCalculator
+
+  /** What a list of calculators says of each, in the order of the bench. */
+  export const benchIndex: readonly {
+    id: string
+    group: Group
+    weekly: boolean
+    words: { readonly name: string; readonly purpose: string }
+  }[]
+
+  /** Loads the calculators of a group. */
+  export const benchPieces: Readonly<Record<Group, () => Promise<{ calculators: readonly Calculator[] }>>>
+}
