@@ -7,7 +7,7 @@ import type { Plugin } from 'vite'
 import react from '@vitejs/plugin-react'
 import tailwindcss from '@tailwindcss/vite'
 import { calculators } from './shared/bench/calculators.ts'
-import { benchGroups } from './shared/bench/groups.ts'
+import type { AnyCalculator } from './shared/bench/definition.ts'
 import { say } from './shared/bench/words.ts'
 
 const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
@@ -38,8 +38,8 @@ const benchFolder = fileURLToPath(new URL('shared/bench/', import.meta.url))
 const benchModule = 'virtual:bench'
 
 /**
- * The calculators of the bench in pieces, so that a sheet does not load all of them: `virtual:bench` has what a list of them
- * says, and loads those of one group.
+ * The calculators of the bench in a dozen pieces, so that a sheet does not load all of them: `virtual:bench` has what a list
+ * of them says, and loads one piece. A piece for each would make what they share seem wanted by every sheet.
  */
 const benchInPieces: Plugin = {
   name: 'bench-in-pieces',
@@ -48,7 +48,7 @@ const benchInPieces: Plugin = {
     if (!id.startsWith(`\0${benchModule}`)) return null
     const asked = id.slice(benchModule.length + 2)
     if (asked !== '') {
-      const ids = calculators.filter((of) => of.group === asked).map((of) => of.id)
+      const ids = calculators.filter((of) => pieceOf(of) === asked).map((of) => of.id)
       const lines = ids.map((each, at) => {
         const { name, file } = calculatorFile(each)
         return `import { ${name} as c${String(at)} } from ${JSON.stringify(file)}`
@@ -59,16 +59,19 @@ const benchInPieces: Plugin = {
     }
     const entries = calculators.map((of) => {
       const words = JSON.stringify({ name: say(of, 'name'), purpose: say(of, 'purpose') })
-      return `{ id: '${of.id}', group: '${of.group}', weekly: ${String(of.weekly ?? false)}, words: defineMessages(${words}) }`
+      return `{ id: '${of.id}', group: '${of.group}', weekly: ${String(of.weekly ?? false)}, piece: '${pieceOf(of)}', words: defineMessages(${words}) }`
     })
     const messages = fileURLToPath(new URL('shared/messages/define-messages.ts', import.meta.url))
     return [
       `import { defineMessages } from ${JSON.stringify(messages)}`,
       `export const benchIndex = [${entries.join()}]`,
-      `export const benchPieces = { ${benchGroups.map((group) => `${group}: () => import('${benchModule}/${group}')`).join()} }`,
+      `export const benchPieces = { ${[...new Set(calculators.map(pieceOf))].map((piece) => `'${piece}': () => import('${benchModule}/${piece}')`).join()} }`,
     ].join('\n')
   },
 }
+
+/** Those of a group that people use every week, or its others. */
+const pieceOf = ({ group, weekly }: AnyCalculator) => `${group}-${weekly ? 'weekly' : 'more'}`
 
 /** The file that describes a calculator, and what it is called there. */
 function calculatorFile(id: string): { name: string; file: string } {

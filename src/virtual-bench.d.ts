@@ -8,9 +8,13 @@ declare module 'virtual:bench' {
     id: string
     group: Group
     weekly: boolean
+    /** Which piece it is loaded with. */
+    piece: string
     words: { readonly name: string; readonly purpose: string }
   }[]
 
-  /** Loads the calculators of a group. */
-  export const benchPieces: Readonly<Record<Group, () => Promise<{ calculators: readonly Calculator[] }>>>
+  /** Loads the calculators of a piece. */
+  export const benchPieces: Readonly<
+    Record<string, (() => Promise<{ calculators: readonly Calculator[] }>) | undefined>
+  >
 }

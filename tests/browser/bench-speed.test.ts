@@ -1,3 +1,6 @@
+import { readdir, readFile } from 'node:fs/promises'
+import path from 'node:path'
+import { gzipSync } from 'node:zlib'
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { launchChromium } from '../support/chromium.ts'
@@ -69,5 +72,66 @@ describe('from a key to the new figure', () => {
       medians.push(times.sort((a, b) => a - b)[Math.floor(times.length / 2)] ?? Infinity)
     }
     expect(Math.min(...medians), medians.join(', ')).toBeLessThanOrEqual(mostMedianMs)
+  })
+})
+
+interface Built {
+  file: string
+  imports?: string[]
+}
+const client = path.resolve(import.meta.dirname, '../../dist/client')
+const mostBytes = 60_000
+
+describe('what a calculator loads', () => {
+  it('is at most 60 kB of script, packed, beyond what a sheet with a form loads', async () => {
+    const manifest = JSON.parse(await readFile(path.join(client, '.vite/manifest.json'), 'utf8')) as Record<
+      string,
+      Built
+    >
+    const filesOf = (...keys: string[]): Set<string> => {
+      const files = new Set<string>()
+      const take = (key: string): void => {
+        const chunk = manifest[key]
+        if (!chunk) throw new Error(`${key} is not in the build`)
+        if (files.has(chunk.file)) return
+        files.add(chunk.file)
+        chunk.imports?.forEach(take)
+      }
+      keys.forEach(take)
+      return files
+    }
+    const there = filesOf('index.html', 'src/app/shell/frame.tsx', 'src/app/routes/enclosure-measure.tsx')
+    const packedBeyond = async (...keys: string[]): Promise<number> => {
+      let packed = 0
+      for (const file of filesOf(...keys))
+        if (!there.has(file)) packed += gzipSync(await readFile(path.join(client, file))).length
+      return packed
+    }
+    const pieces = Object.keys(manifest).filter((key) => key.includes('virtual:bench/'))
+    expect(pieces.length).toBeGreaterThan(5)
+    for (const piece of pieces)
+      expect(await packedBeyond('src/app/routes/bench/calculator.tsx', piece), piece).toBeLessThan(mostBytes)
+    expect(await packedBeyond('src/app/routes/bench/bench.tsx'), 'the list').toBeLessThan(mostBytes / 4)
+  })
+
+  it('has no second evaluator of arithmetic in it', async () => {
+    const page = await openSignedIn(browser, app, 'technician', '/bench/bath-dose', deskSize)
+    const loaded = new Set<string>()
+    page.on('response', (response) => {
+      if (response.request().resourceType() === 'script') loaded.add(new URL(response.url()).pathname)
+    })
+    await page.reload()
+    await page.getByRole('button', { name: 'Fill in an example' }).click()
+    await page.getByRole('region', { name: 'Result' }).getByText(/^189/).waitFor()
+    await page.waitForLoadState('networkidle')
+    expect(loaded.size).toBeGreaterThan(5)
+    const holds = async (file: string) =>
+      /Too many arguments in function/.test(await readFile(path.join(client, file), 'utf8'))
+    const scripts = (await readdir(path.join(client, 'assets'))).filter((name) => name.endsWith('.js'))
+    const evaluators: string[] = []
+    for (const script of scripts) if (await holds(`assets/${script}`)) evaluators.push(`/assets/${script}`)
+    // it is built, for fields in which somebody types arithmetic
+    expect(evaluators.length).toBeGreaterThan(0)
+    expect(evaluators.filter((file) => loaded.has(file))).toEqual([])
   })
 })
