@@ -169,9 +169,12 @@ export const saltMass = defineCalculator({
     const plan = perDay ? plannedDays(salt.value, perDay, purity) : ok(undefined)
     if (!plan.ok) return plan
     const pure: Figure = { key: 'salt', value: saltKg, unit: 'kg' }
-    const main: Figure = division
-      ? measuredFigure('weighed', grams, 'g', measured.value)
-      : { key: 'weighed', value: weighed.value, unit: 'kg' }
+    const onBalance = measuredFigure('weighed', grams, 'g', measured.value)
+    // in kilograms the figure is the very value of its line
+    const main: Figure =
+      division && onBalance.unit !== 'kg'
+        ? onBalance
+        : { ...(division ? onBalance : {}), key: 'weighed', value: weighed.value, unit: 'kg' }
     return ok({
       figures: [
         ...(purity || division ? ([main, pure] as const) : ([pure] as const)),

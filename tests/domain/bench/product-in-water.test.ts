@@ -78,7 +78,7 @@ describe('the make-up of a bath', () => {
     ],
     [
       'a loss too small to count',
-      { after: 'half-life', halfLife: '40000 d', elapsed: '0.000000001 s' },
+      { after: 'half-life', halfLife: '123 d', elapsed: '0.1 min' },
       'elapsed nothing-missing',
     ],
     [
