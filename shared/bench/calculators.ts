@@ -19,6 +19,7 @@ import { measuredVolume } from './calculators/measured-volume.ts'
 import { medicatedFeed } from './calculators/medicated-feed.ts'
 import { oxygenSaturation } from './calculators/oxygen-saturation.ts'
 import { ozoneDose } from './calculators/ozone-dose.ts'
+import { repeatedDoses } from './calculators/repeated-doses.ts'
 import { salinityChange } from './calculators/salinity-change.ts'
 import { salinityFromConductivity } from './calculators/salinity-from-conductivity.ts'
 import { saltMass } from './calculators/salt-mass.ts'
@@ -43,6 +44,7 @@ export const calculators: readonly AnyCalculator[] = [
   concentrationReached,
   stockSolution,
   flowThroughBath,
+  repeatedDoses,
   injection,
   tricaineBath,
   unionisedAmmoniaCalculator,
