@@ -1,12 +1,12 @@
 /** Made in `vite.config.ts` from the calculators of `shared/bench`. */
 declare module 'virtual:bench' {
-  type Group = import('../shared/bench/groups.ts').BenchGroup
-  type Calculator = import('../shared/bench/definition.ts').AnyCalculator
+  import type { AnyCalculator } from '../shared/bench/definition.ts'
+  import type { BenchGroup } from '../shared/bench/groups.ts'
 
   /** What a list of calculators says of each, in the order of the bench. */
   export const benchIndex: readonly {
     id: string
-    group: Group
+    group: BenchGroup
     weekly: boolean
     /** Which piece it is loaded with. */
     piece: string
@@ -15,6 +15,6 @@ declare module 'virtual:bench' {
 
   /** Loads the calculators of a piece. */
   export const benchPieces: Readonly<
-    Record<string, (() => Promise<{ calculators: readonly Calculator[] }>) | undefined>
+    Record<string, (() => Promise<{ calculators: readonly AnyCalculator[] }>) | undefined>
   >
 }
