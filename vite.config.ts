@@ -1,10 +1,14 @@
 /// <reference types="vitest/config" />
 import { createHash } from 'node:crypto'
 import { readFileSync } from 'node:fs'
+import { fileURLToPath } from 'node:url'
 import { defineConfig } from 'vite'
 import type { Plugin } from 'vite'
 import react from '@vitejs/plugin-react'
 import tailwindcss from '@tailwindcss/vite'
+import { calculators } from './shared/bench/calculators.ts'
+import type { AnyCalculator } from './shared/bench/definition.ts'
+import { say } from './shared/bench/words.ts'
 
 const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
 // each file has its own database, browser and folders: the server need not be loaded anew for each of them
@@ -29,6 +33,57 @@ const paintAfterTheme: Plugin = {
  */
 const withoutSignal =
   /\/src\/app\/(shell\/(frame|hand-frame)|routes\/(today|water|enclosure|animals|animal|quarantine\/(board|case|rounds|observe|urgent|unsent)|orders\/(orders|order|sheet)))\.tsx$/
+
+const benchFolder = fileURLToPath(new URL('shared/bench/', import.meta.url))
+const benchModule = 'virtual:bench'
+
+/**
+ * The calculators of the bench in a dozen pieces, so that a sheet does not load all of them: `virtual:bench` has what a list
+ * of them says, and loads one piece. A piece for each would make what they share seem wanted by every sheet.
+ */
+const benchInPieces: Plugin = {
+  name: 'bench-in-pieces',
+  resolveId: (id) => (id === benchModule || id.startsWith(`${benchModule}/`) ? `\0${id}` : null),
+  load(id) {
+    if (!id.startsWith(`\0${benchModule}`)) return null
+    const asked = id.slice(benchModule.length + 2)
+    if (asked !== '') {
+      const ids = calculators.filter((of) => pieceOf(of) === asked).map((of) => of.id)
+      const lines = ids.map((each, at) => {
+        const { name, file } = calculatorFile(each)
+        return `import { ${name} as c${String(at)} } from ${JSON.stringify(file)}`
+      })
+      return [...lines, `export const calculators = [${ids.map((_, at) => `c${String(at)}`).join()}]`].join(
+        '\n',
+      )
+    }
+    const entries = calculators.map((of) => {
+      const words = JSON.stringify({ name: say(of, 'name'), purpose: say(of, 'purpose') })
+      return `{ id: '${of.id}', group: '${of.group}', weekly: ${String(of.weekly ?? false)}, piece: '${pieceOf(of)}', words: defineMessages(${words}) }`
+    })
+    const messages = fileURLToPath(new URL('shared/messages/define-messages.ts', import.meta.url))
+    return [
+      `import { defineMessages } from ${JSON.stringify(messages)}`,
+      `export const benchIndex = [${entries.join()}]`,
+      `export const benchPieces = { ${[...new Set(calculators.map(pieceOf))].map((piece) => `'${piece}': () => import('${benchModule}/${piece}')`).join()} }`,
+    ].join('\n')
+  },
+}
+
+/** Those of a group that people use every week, or its others. */
+const pieceOf = ({ group, weekly }: AnyCalculator) => `${group}-${weekly ? 'weekly' : 'more'}`
+
+/** The file that describes a calculator, and what it is called there. */
+function calculatorFile(id: string): { name: string; file: string } {
+  const listed = readFileSync(`${benchFolder}calculators.ts`, 'utf8')
+  for (const [, name = '', file = ''] of listed.matchAll(
+    /^import { (\w+) } from '\.\/(calculators\/[^']+)'$/gm,
+  )) {
+    const text = readFileSync(`${benchFolder}${file}`, 'utf8')
+    if (new RegExp(`^  id: '${id}',$`, 'm').test(text)) return { name, file: `${benchFolder}${file}` }
+  }
+  throw new Error(`no file describes the calculator ${id}`)
+}
 
 /** Writes the service worker with the list of files that those sheets are built of; the version is made of their names. */
 const serviceWorker: Plugin = {
@@ -70,7 +125,7 @@ const serviceWorker: Plugin = {
 const wantedByEverySheet = { name: 'every-sheet', minShareCount: 47 }
 
 export default defineConfig({
-  plugins: [react(), tailwindcss(), paintAfterTheme, serviceWorker],
+  plugins: [react(), tailwindcss(), paintAfterTheme, benchInPieces, serviceWorker],
   // Fonts stay files: the content security policy takes none from data addresses
   build: {
     outDir: 'dist/client',

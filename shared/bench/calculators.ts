@@ -8,6 +8,7 @@ import { copperSulfate } from './calculators/copper-sulfate.ts'
 import { dechlorination } from './calculators/dechlorination.ts'
 import { concentrationReached } from './calculators/concentration-reached.ts'
 import { conductivityFromSalinity } from './calculators/conductivity-from-salinity.ts'
+import { dripAcclimation } from './calculators/drip-acclimation.ts'
 import { evaporation } from './calculators/evaporation.ts'
 import { flowThroughBath } from './calculators/flow-through-bath.ts'
 import { groupBiomassCalculator } from './calculators/group-biomass.ts'
@@ -56,6 +57,7 @@ export const calculators: readonly AnyCalculator[] = [
   salinityChange,
   saltMass,
   evaporation,
+  dripAcclimation,
   turnover,
   medicatedFeed,
   groupBiomassCalculator,

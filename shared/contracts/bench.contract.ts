@@ -5,6 +5,8 @@ import { bodySchema } from '../bench/schema.ts'
 import { say } from '../bench/words.ts'
 import { contract } from './contract.ts'
 
+export { printBenchSheet } from './bench-print.contract.ts'
+
 const Shown = z.string().describe('The number with its unit, rounded, as screens show it')
 
 export const BenchFigure = z.object({
@@ -127,22 +129,6 @@ export const askUnknownCalculator = contract({
   reply: { 200: BenchReply },
   problems: ['not-found'],
   idempotent: 'nothing-kept',
-})
-
-export const printBenchSheet = contract({
-  id: 'printBenchSheet',
-  method: 'post',
-  path: '/bench/:calculator/sheet',
-  action: 'collection.read',
-  summary:
-    'Ask a calculator and print the answer as PDF: inputs, working, sources and cautions; nothing is kept',
-  params: z.strictObject({ calculator: z.string().describe('Name of a calculator') }),
-  // as the calculator itself takes it
-  body: z.record(z.string(), z.unknown()).describe('What the calculator is asked; see its own address'),
-  reply: { 200: z.string().describe('PDF') },
-  problems: ['not-found', 'not-computable', 'working-disagrees', 'print-busy', 'print-failed'],
-  idempotent: 'nothing-kept',
-  produces: 'pdf',
 })
 
 export const calculatorContracts = calculators.map((of) => ({ of, contract: calculatorContract(of) }))

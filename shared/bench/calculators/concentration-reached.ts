@@ -43,7 +43,7 @@ export const concentrationReached = defineCalculator({
     'result.difference': 'Difference from the target',
     'line.difference': 'Difference from the target',
     'caution.above-wanted': (p: { most: string }) =>
-      `This is more than ${p.most} % above the target. Tell the veterinarian now; a water change thins it, and the working says by how much.`,
+      `This is more than ${p.most} % above the target. Tell the veterinarian now. Water changes thin it; the calculator of water changes says how many.`,
     'caution.below-wanted': (p: { most: string }) =>
       `This is more than ${p.most} % below the target. Add nothing before the veterinarian has been asked.`,
     'caution.what-went-in':

@@ -120,7 +120,7 @@ export const groupBiomassCalculator = defineCalculator({
       ],
       working: [
         line('weighed', weighed, weighedKg, 'kg'),
-        line('gain', `${enteredTerm(feedGiven)} / (${enteredTerm(feedConversion)}) to kg`, gainKg, 'kg'),
+        line('gain', `${enteredTerm(feedGiven)} / ${enteredTerm(feedConversion)} to kg`, gainKg, 'kg'),
         line('biomass', `${valueTerm(weighedKg, 'kg')} + ${valueTerm(gainKg, 'kg')}`, biomassKg, 'kg', [
           'weighed',
           'gain',

@@ -41,6 +41,7 @@ export const makeUpDose = defineCalculator({
     ...volumeWords,
     'input.changed': 'Water taken out and replaced',
     'help.changed': 'Only what was replaced by water without the drug. What evaporated took no drug with it.',
+    'input.changedError': 'Error of the water replaced',
     'input.before': 'Concentration before the change, by a test',
     'help.before': 'Left open, the bath is taken to have been at its target.',
     'input.measured': 'Concentration now, by a test',
@@ -63,6 +64,13 @@ export const makeUpDose = defineCalculator({
     basis: basisInput,
     ...volumeInputs,
     changed: quantity({ units: volumeUnits, limits: { above: 0 }, when: { after: ['change'] } }),
+    changedError: quantity({
+      units: ['percent'],
+      limits: { min: 0, max: 90 },
+      optional: true,
+      errorOf: 'changed',
+      when: { after: ['change'] },
+    }),
     before: quantity({ units: tested, limits: { min: 0 }, optional: true, when: { after: ['change'] } }),
     measured: quantity({ units: tested, limits: { min: 0 }, when: { after: ['test'] } }),
     halfLife: quantity({

@@ -1,7 +1,7 @@
 import { drugInFeed } from '../../domain/feed/drug-in-feed.ts'
 import { feedLimits } from '../../domain/feed/feed-limits.ts'
 import { gelBatchDays, gelBatchDrug } from '../../domain/feed/gel-batch.ts'
-import { drugPerDay, feedPerDay } from '../../domain/feed/per-day.ts'
+import { doseTaken, drugPerDay, feedPerDay } from '../../domain/feed/per-day.ts'
 import { premixForBatch, premixKgPerTonne } from '../../domain/feed/premix.ts'
 import { ok, refuse, type Result } from '../../domain/result.ts'
 import { convert } from '../../domain/units/convert.ts'
@@ -9,27 +9,37 @@ import type { ParsedQuantity } from '../../domain/units/parse-quantity.ts'
 import { enteredTerm } from '../../domain/working/entered-term.ts'
 import { valueTerm } from '../../domain/working/value-term.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
-import { defineCalculator, type BenchCaution, type BenchLine, type Figure } from '../definition.ts'
+import {
+  defineCalculator,
+  type BenchCaution,
+  type BenchLine,
+  type Figure,
+  type Outcome,
+} from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
 import { massFigure } from './parts/mass-figure.ts'
 
 const gramsPerKilogram = 1000
 const mixed = ['batch', 'strength'] as const
+const planned = [...mixed, 'day'] as const
+const ofGroup = ['day', 'taken'] as const
 const massUnits = ['kg', 'g', 't', 'lb'] as const
 
-/** How strong a feed has to be, what to weigh into a batch of it, and what a group takes in a day. */
+/** How strong a feed has to be, what to weigh into a batch of it, and what a group is to take or has taken in a day. */
 export const medicatedFeed = defineCalculator({
   id: 'medicated-feed',
   group: 'body',
   words: defineMessages({
     name: 'Medicated feed',
-    purpose: 'How strong a feed or a gel has to be, what to weigh into a batch, and how long it lasts.',
+    purpose:
+      'How strong a feed or a gel has to be, what to weigh into a batch, and what a group takes and has taken.',
     formula: 'strength = dose ÷ (feeding rate ÷ 100)',
     'input.find': 'What to find',
     'option.find.batch': 'What to weigh into a batch',
     'option.find.strength': 'How strong the feed has to be',
-    'option.find.day': 'What a group takes in a day',
+    'option.find.day': 'What a group is to take in a day',
+    'option.find.taken': 'What a group has taken in a day',
     'input.feed': 'Kind of feed',
     'option.feed.dry': 'Dry feed',
     'option.feed.gel': 'Gel food',
@@ -47,6 +57,10 @@ export const medicatedFeed = defineCalculator({
     'input.biomass': 'Mass of the group',
     'help.biomass': 'All animals together. With it the batch is told in days.',
     'input.biomassError': 'Error of the mass',
+    'input.fed': 'Drug in the feed that was fed',
+    'input.eaten': 'Feed eaten in the day',
+    'help.eaten': 'What was given, less what was left over.',
+    'result.taken': 'Dose taken',
     'result.strength': 'Drug in a kilogram of feed',
     'result.short-ton': 'Drug in a US short ton of feed',
     'result.per-tonne': 'Premix in a tonne of feed',
@@ -56,6 +70,8 @@ export const medicatedFeed = defineCalculator({
     'result.drug-day': 'Drug a day',
     'result.feed-day': 'Feed a day',
     'result.days': 'The batch lasts',
+    'line.fed': 'Drug in a kilogram of the feed',
+    'line.taken': 'Dose taken, a mean of the group',
     'line.strength': 'Drug in a kilogram of feed, the same number of grams in a tonne',
     'line.short-ton': 'Drug in a US short ton',
     'line.per-tonne': 'Premix in a tonne',
@@ -72,19 +88,33 @@ export const medicatedFeed = defineCalculator({
       'The feeding rate is of the gel as it is fed. Weigh the batch after water and binder are in it, or the dose is wrong.',
     'caution.sick-eat-less':
       'Sick animals eat less and take less drug. What they took is the strength of the feed times what they ate: write down what was left.',
+    'caution.mean-of-group':
+      'It is a mean: the animal that did not eat has taken nothing, and the sickest eat least.',
     'caution.authority':
       'Medicated feed is regulated. This figure is no permission: the order, the label and local law say what may be fed, and to whom.',
   }),
   inputs: {
-    find: choice(['batch', 'strength', 'day']),
+    find: choice(['batch', 'strength', 'day', 'taken']),
     feed: choice(['dry', 'gel']),
     dose: quantity({
       units: ['mg/kg', 'ug/kg'],
       limits: { above: 0, max: feedLimits.mostDoseMgPerKg, plausible: { min: 0.01, max: 300 } },
+      when: { find: planned },
     }),
     rate: quantity({
       units: ['percent'],
       limits: { above: 0, max: feedLimits.mostRatePercent, plausible: { min: 0.1, max: 20 } },
+      when: { find: planned },
+    }),
+    fed: quantity({
+      units: ['mg/kg_w_w', 'g/kg_w_w', 'percent_w_w', 'g/ton_us'],
+      limits: { min: 0, max: 100, plausible: { max: 5 } },
+      when: { find: ['taken'] },
+    }),
+    eaten: quantity({
+      units: massUnits,
+      limits: { min: 0, max: feedLimits.mostFeedKg * gramsPerKilogram },
+      when: { find: ['taken'] },
     }),
     additive: choice(['active', 'premix'], { when: { find: mixed } }),
     premix: quantity({
@@ -107,7 +137,7 @@ export const medicatedFeed = defineCalculator({
       limits: { min: 0, max: 90 },
       optional: true,
       errorOf: 'biomass',
-      when: { find: ['day'] },
+      when: { find: ofGroup },
     }),
   },
   fields: {
@@ -117,6 +147,8 @@ export const medicatedFeed = defineCalculator({
     premixPercentWw: 'premix',
     batchG: 'batch',
     biomassKg: 'biomass',
+    mgPerKgFeed: 'fed',
+    eatenKg: 'eaten',
   },
   example: {
     find: 'batch',
@@ -128,10 +160,7 @@ export const medicatedFeed = defineCalculator({
     biomass: { value: '4', unit: 'kg' },
   },
   sources: ['feed-arithmetic', 'nist-sp-811'],
-  cautions: [
-    { code: 'sick-eat-less', level: 'note' },
-    { code: 'authority', level: 'note' },
-  ],
+  cautions: [{ code: 'authority', level: 'note' }],
   plot: { vary: 'rate', unit: 'percent', from: 0.5, to: 10, figure: 'strength' },
   published: [
     'drug_per_day_mg',
@@ -142,8 +171,10 @@ export const medicatedFeed = defineCalculator({
     'gel_batch_drug_mg',
     'gel_batch_fish_days',
   ],
-  compute({ find, feed, dose, rate, additive, premix, batch, biomass }) {
-    if (find === 'day' && !biomass) return refuse('blank', 'biomass', { unit: 'kg' })
+  compute({ find, feed, dose, rate, fed, eaten, additive, premix, batch, biomass }) {
+    if ((find === 'day' || find === 'taken') && !biomass) return refuse('blank', 'biomass', { unit: 'kg' })
+    if (find === 'taken' && fed && eaten && biomass) return takenBy(fed, eaten, biomass)
+    if (!dose || !rate) return refuse('blank', 'dose', { unit: 'mg/kg' })
     const strength = strengthOf(dose, rate)
     if (!strength.ok) return strength
     const mixing = find === 'day' ? ok(none) : mixingOf(strength.value.mgPerKg, dose, rate, premix, batch)
@@ -158,7 +189,10 @@ export const medicatedFeed = defineCalculator({
           : [strength.value, mixing.value, day.value]
     const [first, ...rest] = parts.flatMap(({ figures }) => figures)
     if (first === undefined) return refuse('not-chosen', additive === undefined ? 'additive' : 'batch')
-    const cautions: BenchCaution[] = feed === 'gel' ? [{ code: 'as-fed', level: 'warning' }] : []
+    const cautions: BenchCaution[] = [
+      ...(feed === 'gel' ? [{ code: 'as-fed', level: 'warning' } as const] : []),
+      { code: 'sick-eat-less', level: 'note' },
+    ]
     return ok({
       figures: [first, ...rest],
       working: [strength.value, mixing.value, day.value].flatMap(({ working }) => working),
@@ -184,7 +218,7 @@ function strengthOf(dose: ParsedQuantity, rate: ParsedQuantity): Result<Part & {
       { key: 'short-ton', value: gPerShortTon, unit: 'g/ton_us' },
     ],
     working: [
-      line('strength', `${String(dose.value)} * 100 / (${enteredTerm(rate)})`, mgPerKg, 'mg/kg_w_w'),
+      line('strength', `${String(dose.value)} * 100 / ${enteredTerm(rate)}`, mgPerKg, 'mg/kg_w_w'),
       line('short-ton', `${valueTerm(mgPerKg, 'mg/kg_w_w')} * 0.90718474`, gPerShortTon, 'g/ton_us', [
         'strength',
       ]),
@@ -258,7 +292,7 @@ function dayOf(
   const part: Part = {
     figures: [
       { key: 'drug-day', value: drug.value, unit: 'mg', kind: 'dose' },
-      { key: 'feed-day', value: eaten.value, unit: 'kg' },
+      { key: 'feed-day', value: eaten.value, unit: 'kg', kind: 'dose' },
     ],
     working: [
       line('drug-day', `${enteredTerm(dose)} * ${mass} to mg`, drug.value, 'mg'),
@@ -279,4 +313,27 @@ function dayOf(
     ),
   )
   return ok(part)
+}
+
+/** The dose that was taken, by what was eaten. */
+function takenBy(fed: ParsedQuantity, eaten: ParsedQuantity, biomass: ParsedQuantity): Result<Outcome> {
+  const strength = convert(Number(fed.entered.value), fed.entered.unit, 'mg/kg_w_w')
+  if (!strength.ok) return strength
+  const taken = doseTaken({
+    mgPerKgFeed: strength.value,
+    eatenKg: eaten.value / gramsPerKilogram,
+    biomassKg: biomass.value / gramsPerKilogram,
+  })
+  if (!taken.ok) return taken
+  const isTyped = fed.entered.unit === 'mg/kg_w_w'
+  const term = valueTerm(strength.value, 'mg/kg_w_w')
+  const expression = `${term} mg/kg * ${enteredTerm(eaten)} / (${enteredTerm(biomass)})`
+  return ok({
+    figures: [{ key: 'taken', value: taken.value, unit: 'mg/kg', figures: 3 }],
+    working: [
+      ...(isTyped ? [] : [line('fed', `${enteredTerm(fed)} * 10000`, strength.value, 'mg/kg_w_w')]),
+      line('taken', expression, taken.value, 'mg/kg', isTyped ? [] : ['fed']),
+    ],
+    cautions: [{ code: 'mean-of-group', level: 'note' }],
+  })
 }

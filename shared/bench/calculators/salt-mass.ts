@@ -71,7 +71,7 @@ export const saltMass = defineCalculator({
     'caution.faster-than-usual': (p: { usual: string }) =>
       `This is faster than is common practice (1 to ${p.usual} a day, no source). The order decides.`,
     'caution.pour':
-      'Dissolve the salt apart and add it slowly where the water moves. Undissolved salt burns animals that lie on it.',
+      'Dissolve the salt apart and add it slowly where the water moves. Undissolved salt burns animals that lie on it (from memory).',
     'caution.sea-salt':
       'Common salt is not sea salt: sea animals need the mix. Take no salt with iodine or an anti-caking agent (from memory).',
     'caution.measure': 'Measure when all is dissolved, and before each next step.',
@@ -140,7 +140,7 @@ export const saltMass = defineCalculator({
     perDay: { value: '3', unit: 'PSS-78' },
     purity: { value: '88', unit: 'percent_w_w' },
   },
-  sources: ['salt-balance'],
+  sources: ['salt-balance', 'treatment-practice'],
   cautions: [
     { code: 'pour', level: 'warning' },
     { code: 'sea-salt', level: 'note' },
@@ -169,9 +169,12 @@ export const saltMass = defineCalculator({
     const plan = perDay ? plannedDays(salt.value, perDay, purity) : ok(undefined)
     if (!plan.ok) return plan
     const pure: Figure = { key: 'salt', value: saltKg, unit: 'kg' }
-    const main: Figure = division
-      ? measuredFigure('weighed', grams, 'g', measured.value)
-      : { key: 'weighed', value: weighed.value, unit: 'kg' }
+    const onBalance = measuredFigure('weighed', grams, 'g', measured.value)
+    // in kilograms the figure is the very value of its line
+    const main: Figure =
+      division && onBalance.unit !== 'kg'
+        ? onBalance
+        : { ...(division ? onBalance : {}), key: 'weighed', value: weighed.value, unit: 'kg' }
     return ok({
       figures: [
         ...(purity || division ? ([main, pure] as const) : ([pure] as const)),

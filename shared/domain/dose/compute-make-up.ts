@@ -19,6 +19,9 @@ export interface MakeUpInput extends Omit<AmountInput, 'volume' | 'present'> {
   netLitres: number
 }
 
+/** Less than a millionth of the target is nothing that anybody can weigh, and has no digits that hold. */
+const countingShare = 1e-6
+
 const unitOfTarget = (target: ReadTarget) => (target.by === 'mass' ? 'mg/L' : 'uL/L')
 
 function rise(target: ReadTarget, value: number, less: string, lines: WorkingLine[]): Rise {
@@ -60,7 +63,8 @@ export function computeMakeUpAfterChange(
     if (!found.ok) return found
     const left = found.value.value * (1 - changedPercent / 100)
     const value = target.concentration.value - left
-    if (value <= 0) return refuse('reading-at-or-above-target', 'before')
+    if (value <= countingShare * target.concentration.value)
+      return refuse('reading-at-or-above-target', 'before')
     const line: WorkingLine = {
       key: 'left-after-change',
       code: 'left-after-change',
@@ -109,7 +113,7 @@ export function computeMakeUpAfterLoss(
   return computeAmount({ ...rest, volume: net.value }, (target) => {
     const { value: wanted } = target.concentration
     const value = wanted - (wanted * percent) / 100
-    if (value <= 0) return refuse('nothing-missing', 'elapsed')
+    if (value <= countingShare * wanted) return refuse('nothing-missing', 'elapsed')
     const less = `${targetTerm(target.concentration)} * ${valueTerm(percent, 'percent')} / 100`
     return ok(rise(target, value, less, [line]))
   })

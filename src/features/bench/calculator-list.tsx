@@ -1,17 +1,15 @@
 import { Link } from 'react-router-dom'
-import { calculators } from '../../../shared/bench/calculators.ts'
-import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { benchGroups } from '../../../shared/bench/groups.ts'
-import { say } from '../../../shared/bench/words.ts'
 import { benchGroupNames } from '../../../shared/messages/bench.ts'
 import { benchSheetWords as words } from '../../../shared/messages/bench-sheet.ts'
 import { paths } from '../../lib/paths.ts'
+import { listedCalculators, type ListedCalculator } from './load-calculator.ts'
 
 /** Calculators whose name or purpose has every one of the words. */
-export function matchingCalculators(q: string): AnyCalculator[] {
+export function matchingCalculators(q: string): ListedCalculator[] {
   const wanted = q.toLowerCase().split(/\s+/).filter(Boolean)
-  return calculators.filter((of) => {
-    const text = `${say(of, 'name')} ${say(of, 'purpose')}`.toLowerCase()
+  return listedCalculators.filter((of) => {
+    const text = `${of.words.name} ${of.words.purpose}`.toLowerCase()
     return wanted.every((word) => text.includes(word))
   })
 }
@@ -49,13 +47,13 @@ export function CalculatorList({ q }: { q: string }) {
   )
 }
 
-function Tools({ of: tools }: { of: readonly AnyCalculator[] }) {
+function Tools({ of: tools }: { of: readonly ListedCalculator[] }) {
   return (
     <ul className="bench-tools">
       {tools.map((of) => (
         <li key={of.id}>
-          <Link to={paths.calculator(of.id)}>{say(of, 'name')}</Link>
-          <span className="t-2">{say(of, 'purpose')}</span>
+          <Link to={paths.calculator(of.id)}>{of.words.name}</Link>
+          <span className="t-2">{of.words.purpose}</span>
         </li>
       ))}
     </ul>

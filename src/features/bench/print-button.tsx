@@ -1,6 +1,6 @@
 import { Download } from 'lucide-react'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
-import { printBenchSheet } from '../../../shared/contracts/bench.contract.ts'
+import { printBenchSheet } from '../../../shared/contracts/bench-print.contract.ts'
 import { benchPaper as words } from '../../../shared/messages/bench-paper.ts'
 import { apiFile } from '../../lib/api-client.ts'
 import { saveFile } from '../../lib/save-file.ts'

@@ -61,6 +61,17 @@ describe('medicated feed', () => {
     expect(range?.low).toBeCloseTo(6075, 6)
     expect(range?.high).toBeCloseTo(7425, 6)
   })
+  it('says what a group has taken by what it ate', async () => {
+    // feed.02 to feed.04 turned round: 0.45 kg, half of 0.9 kg, of 7,500 mg/kg by 90 kg is half of 75 mg/kg (by hand)
+    const ate = { find: 'taken', feed: 'dry', fed: '7500 mg/kg_w_w', eaten: '0.45 kg', biomass: '90 kg' }
+    const { figures, range } = await ask('medicated-feed', { ...ate, biomassError: '10 percent' })
+    expect(figures[0]).toMatchObject({ key: 'taken', unit: 'mg/kg', value: 37.5 })
+    expect(range?.high).toBeCloseTo(37.5 / 0.9, 9)
+    const ton = await ask('medicated-feed', { ...ate, fed: '0.75 percent_w_w', eaten: '450 g' })
+    expect(ton.figures[0].value).toBeCloseTo(37.5, 9)
+    expect(refusalsOf('medicated-feed', { ...ate, biomass: '' })).toEqual(['biomass blank'])
+    expect(refusalsOf('medicated-feed', { ...ate, eaten: '-1 kg' })).toEqual(['eaten below-least'])
+  })
   it('reads a dose in micrograms and a batch in pounds', async () => {
     const small = { ...batch, dose: '75 ug/kg', batch: '100 lb' }
     expect((await ask('medicated-feed', small)).figures[0].value).toBeCloseTo(0.340194, 6)

@@ -38,6 +38,9 @@ describe('the make-up of a bath', () => {
   it('is rounded to the balance and carries the errors of volume and strength', async () => {
     const weighed = await ask('make-up-dose', { ...change, division: '10 mg' })
     expect(weighed.figures[0]).toMatchObject({ rounded: '600', unit: 'mg' })
+    const poured = await ask('make-up-dose', { ...change, changedError: '10 percent' })
+    expect(poured.range?.low).toBeCloseTo(0.54, 9)
+    expect(poured.range?.high).toBeCloseTo(0.66, 9)
     const test = { ...bath, after: 'test', measured: '1.35 mg/L', strength: '80 percent_w_w' }
     const { range } = await ask('make-up-dose', {
       ...test,
@@ -78,7 +81,7 @@ describe('the make-up of a bath', () => {
     ],
     [
       'a loss too small to count',
-      { after: 'half-life', halfLife: '40000 d', elapsed: '0.000000001 s' },
+      { after: 'half-life', halfLife: '123 d', elapsed: '0.1 min' },
       'elapsed nothing-missing',
     ],
     [

@@ -76,6 +76,11 @@ describe('repeated doses', () => {
       { find: 'half-life', initial: '2 mg/L', second: '0 mg/L', elapsed: '5 h' },
       'second not-above-zero',
     ],
+    [
+      'thousands of half-lives',
+      { find: 'left', initial: '4 mg/L', halfLife: '1 min', elapsed: '100 h' },
+      'elapsed above-most',
+    ],
     ['half a dose', { ...course, doses: '2.5 ratio' }, 'doses not-whole'],
     ['no time between', { ...course, interval: '0 h' }, 'interval not-above-zero'],
     ['more than all changed', { ...course, changed: '120 percent' }, 'changed above-most'],

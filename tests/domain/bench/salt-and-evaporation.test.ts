@@ -40,6 +40,9 @@ describe('salt to raise the salinity', () => {
     expect(Math.abs(figures[0].value - 19.318)).toBeLessThanOrEqual(0.001)
     const balance = await ask('salt-mass', { ...litres, purity: '88 percent_w_w', division: '50 g' })
     expect(balance.figures[0]).toMatchObject({ rounded: '19300', unit: 'g' })
+    const scale = await ask('salt-mass', { ...litres, purity: '88 percent_w_w', division: '0.5 kg' })
+    expect(scale.figures[0]).toMatchObject({ rounded: '19.5', unit: 'kg' })
+    expect(scale.working.some((line) => line.value === scale.figures[0].value)).toBe(true)
   })
   it('comes in days at a limit', async () => {
     const days = await ask('salt-mass', { ...mass, perDay: '3 g/kg', purity: '88 percent_w_w' })

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { drugInFeed } from '../../../shared/domain/feed/drug-in-feed.ts'
 import { gelBatchDays, gelBatchDrug } from '../../../shared/domain/feed/gel-batch.ts'
 import { groupBiomass, groupBiomassRange } from '../../../shared/domain/feed/group-biomass.ts'
-import { drugPerDay, feedPerDay } from '../../../shared/domain/feed/per-day.ts'
+import { doseTaken, drugPerDay, feedPerDay } from '../../../shared/domain/feed/per-day.ts'
 import { premixForBatch, premixKgPerTonne } from '../../../shared/domain/feed/premix.ts'
 import { between, expectNear, expectTotal, refusalOf, valueOf } from '../../support/engine-laws.ts'
 
@@ -18,6 +18,19 @@ describe('laws of medicated feed', () => {
     fc.assert(
       fc.property(days, (day) => {
         expectNear(valueOf(drugInFeed(day)).mgPerKg * valueOf(feedPerDay(day)), valueOf(drugPerDay(day)))
+      }),
+    )
+  })
+
+  it('a group that eats all of its feed has taken its dose, and half of it by half of the feed', () => {
+    fc.assert(
+      fc.property(days, (day) => {
+        const { mgPerKg: mgPerKgFeed } = valueOf(drugInFeed(day))
+        const eatenKg = valueOf(feedPerDay(day))
+        const taken = (eaten: number) => valueOf(doseTaken({ ...day, mgPerKgFeed, eatenKg: eaten }))
+        expectNear(taken(eatenKg), day.doseMgPerKg)
+        expectNear(taken(eatenKg / 2), day.doseMgPerKg / 2)
+        expect(taken(0)).toBe(0)
       }),
     )
   })
@@ -143,6 +156,7 @@ describe('laws of medicated feed', () => {
       ],
       [drugPerDay, ['biomassKg', 'doseMgPerKg']],
       [feedPerDay, ['biomassKg', 'feedingRatePercentBw']],
+      [doseTaken, ['mgPerKgFeed', 'eatenKg', 'biomassKg']],
       [drugInFeed, ['doseMgPerKg', 'feedingRatePercentBw']],
       [premixKgPerTonne, ['targetGPerTonne', 'premixPercentWw']],
       [premixForBatch, ['targetGPerTonne', 'premixPercentWw', 'batchG']],

@@ -5,14 +5,16 @@ import { concentrationRules } from './flow-limits.ts'
 
 type LossRefusal = LimitRefusal | 'not-finite'
 
+/** After more half-lives than these what is left has no digits in a double. */
+const mostHalfLives = 1000
 const hours = (field: string) => ({ field, unit: 'h', min: 0, max: 1_000_000 }) as const
 
 /**
  * The share that a loss of first order leaves in a time: 2^(−t ÷ half-life).
  *
  * @param input.halfLifeHours above 0, at most 1,000,000
- * @param input.hours         0…1,000,000
- * @returns a fraction, 0…1; 0 after so many half-lives that nothing is left to count
+ * @param input.hours         0…1,000,000, at most a thousand half-lives
+ * @returns a fraction above 0, at most 1
  * @refuses not-finite · below-least, above-most · not-above-zero (half-life)
  * @source  stirred-tank · check value decay.01
  */
@@ -21,7 +23,10 @@ export function shareKept(input: { halfLifeHours: number; hours: number }): Resu
     [input.halfLifeHours, { field: 'halfLifeHours', unit: 'h', above: 0, max: 1_000_000 }],
     [input.hours, hours('hours')],
   ])
-  return refused ?? ok(2 ** (-input.hours / input.halfLifeHours))
+  if (refused) return refused
+  const max = Number((mostHalfLives * input.halfLifeHours).toPrecision(6))
+  const countable = checkNumbers([[input.hours, { ...hours('hours'), max }]])
+  return countable ?? ok(2 ** (-input.hours / input.halfLifeHours))
 }
 
 /**
