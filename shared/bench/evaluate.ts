@@ -12,7 +12,7 @@ import { roundFigure, type RoundedFigure } from './round-figure.ts'
 export interface BenchAnswer {
   /** The first is the result. */
   figures: readonly [RoundedFigure, ...RoundedFigure[]]
-  /** What the stated errors of the inputs make of the result, in its unit, unrounded; null when none is stated. */
+  /** What the stated errors of the inputs make of the result, in its unit, unrounded; null when none moves it. */
   range: { low: number; high: number } | null
   working: Outcome['working']
   schedule: Outcome['schedule'] | null
@@ -90,6 +90,9 @@ function statedErrors(of: AnyCalculator, read: Read): { name: string; share: num
   })
 }
 
+/** Two results nearer than this, relative, differ by the arithmetic of the machine alone. */
+const lastDigit = 1e-12
+
 function rangeOf(
   of: AnyCalculator,
   read: Read,
@@ -105,7 +108,10 @@ function rangeOf(
     if (!outcome.ok) return { known: false, value: null }
     values.push(outcome.value.figures[0].value)
   }
-  return { known: true, value: { low: Math.min(...values), high: Math.max(...values) } }
+  const [low, high] = [Math.min(...values), Math.max(...values)]
+  // an error of something that this answer does not go by: "0.9 g to 0.9 g" says nothing
+  const moves = high - low > lastDigit * Math.max(Math.abs(low), Math.abs(high))
+  return { known: true, value: moves ? { low, high } : null }
 }
 
 function scaled(parsed: ParsedQuantity, factor: number): ParsedQuantity {

@@ -57,7 +57,7 @@ export const BenchReply = z.object({
       shown: z.string().describe('Both ends, rounded, as screens show them'),
     })
     .nullable()
-    .describe('What the stated errors of the inputs make of the result; null when none is stated'),
+    .describe('What the stated errors of the inputs make of the result; null when none moves it'),
   figures: z.array(BenchFigure).describe('The result and whatever else was worked out with it'),
   working: z.array(BenchWorkingLine).describe('Every step; each was evaluated a second, independent way'),
   schedule: z

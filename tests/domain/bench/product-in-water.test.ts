@@ -41,6 +41,8 @@ describe('the make-up of a bath', () => {
     const poured = await ask('make-up-dose', { ...change, changedError: '10 percent' })
     expect(poured.range?.low).toBeCloseTo(0.54, 9)
     expect(poured.range?.high).toBeCloseTo(0.66, 9)
+    // only the water that was changed is dosed: the error of the whole volume moves nothing
+    expect((await ask('make-up-dose', { ...change, volumeError: '10 percent' })).range).toBeNull()
     const test = { ...bath, after: 'test', measured: '1.35 mg/L', strength: '80 percent_w_w' }
     const { range } = await ask('make-up-dose', {
       ...test,
