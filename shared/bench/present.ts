@@ -5,6 +5,7 @@ import { formatWorkingValue } from '../domain/quantities/format-working-value.ts
 import type { FormattedQuantity } from '../domain/quantities/formatted-quantity.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
 import type { BenchLine, Schedule } from './definition.ts'
+import type { BenchAnswer } from './evaluate.ts'
 import { roundFigure, type RoundedFigure } from './round-figure.ts'
 
 /** A figure as it is shown: a dose without trailing zeros, everything else with the digits that it is worth. */
@@ -39,6 +40,36 @@ export function formatLine(
   for (const [number] of line.expression.matchAll(/\d+\.\d+/g))
     if (number.replace('.', '').replace(/^0+/, '').length >= madeDigits) earlier.add(number)
   return { formula: formatExpression(line.expression, earlier), result: formatWorkingValue(line) }
+}
+
+/** A line of a whole working. */
+export interface ShownLine {
+  line: BenchLine
+  formula: string
+  result: FormattedQuantity
+  /** The line that the result of the calculator is the rounded value of. */
+  isResult: boolean
+}
+
+/** As many digits of an unrounded result as an inspector could want; a double holds a few more. */
+const unroundedDigits = 10
+
+/**
+ * The working as people read it. The result is rounded to what it is worth where it stands large; here it keeps its
+ * digits, so that both can be compared.
+ */
+export function formatWorking({ figures, working }: Pick<BenchAnswer, 'figures' | 'working'>): ShownLine[] {
+  const last = working.findLastIndex((line) => line.value === figures[0].value)
+  const at = last === -1 ? working.length - 1 : last
+  return working.map((line, index) => {
+    const { formula, result } = formatLine(line, working)
+    const isResult = index === at
+    return { line, formula, result: isResult ? unrounded(line) : result, isResult }
+  })
+}
+
+function unrounded({ value, unit }: BenchLine): FormattedQuantity {
+  return formatDose(quantityOf(Number(value.toPrecision(unroundedDigits)), unit).value, unit)
 }
 
 /** A figure of a plan, with the digits that its column is worth. */

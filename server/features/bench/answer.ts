@@ -2,7 +2,7 @@ import type { BenchReply } from '../../../shared/contracts/bench.contract.ts'
 import type { FieldProblem } from '../../../shared/contracts/problems.ts'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate, type BenchAnswer } from '../../../shared/bench/evaluate.ts'
-import { formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { say, sayCaution, sayLine, sayRefusal } from '../../../shared/bench/words.ts'
 import type { Refusal } from '../../../shared/domain/result.ts'
 import { sources, type SourceKey } from '../../../shared/domain/sources.ts'
@@ -40,7 +40,7 @@ export async function answerOf(of: AnyCalculator, body: unknown): Promise<BenchA
 
 /** An answer as it crosses the wire: every figure also as it is shown, every line and caution also in words. */
 export function presentAnswer(of: AnyCalculator, answer: BenchAnswer): BenchReply {
-  const { figures, range, working, schedule, cautions } = answer
+  const { figures, range, schedule, cautions } = answer
   const [result] = figures
   const ends = range && formatRange(range, result)
   return {
@@ -61,8 +61,7 @@ export function presentAnswer(of: AnyCalculator, answer: BenchAnswer): BenchRepl
       significantFigures: figure.significantFigures,
       shown: formatFigure(figure).text,
     })),
-    working: working.map((line) => {
-      const { formula, result: shown } = formatLine(line, working)
+    working: formatWorking(answer).map(({ line, formula, result: shown }) => {
       const { key, expression, value, unit, rests } = line
       return {
         key,

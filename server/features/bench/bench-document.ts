@@ -1,6 +1,6 @@
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
-import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatCell, formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { sayInputs } from '../../../shared/bench/say-inputs.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
 import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
@@ -52,14 +52,13 @@ function inputBlocks({ of, body }: BenchPaper): DocumentBlock[] {
   ]
 }
 
-function workingBlocks({ of, answer: { figures, working } }: BenchPaper): DocumentBlock[] {
-  const [result] = figures
-  const at = working.findLastIndex((line) => line.value === result.value)
-  const total = at === -1 ? working.length - 1 : at
-  const lines = working.map((line, i) => {
-    const { formula, result: shown } = formatLine(line, working)
-    return { what: sayLine(of, line), formula, result: shown.text, total: i === total }
-  })
+function workingBlocks({ of, answer }: BenchPaper): DocumentBlock[] {
+  const lines = formatWorking(answer).map(({ line, formula, result, isResult }) => ({
+    what: sayLine(of, line),
+    formula,
+    result: result.text,
+    total: isResult,
+  }))
   return [
     { kind: 'heading', text: benchPaper.working },
     { kind: 'working', lines },

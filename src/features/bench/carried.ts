@@ -1,7 +1,7 @@
 import type { AnyCalculator, Carry, Given, OrderCarry } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
 import type { Input } from '../../../shared/bench/inputs.ts'
-import { formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { readInputs, type Read } from '../../../shared/bench/read-inputs.ts'
 import { roundedTo } from '../../../shared/bench/round-figure.ts'
 import { sayInputs } from '../../../shared/bench/say-inputs.ts'
@@ -36,10 +36,9 @@ export function saidOf(of: AnyCalculator, { body, answer, originOf }: Asked): Be
       const from = originOf(input)
       return from === undefined ? words.line({ what, text }) : words.lineFrom({ what, text, from })
     }),
-    working: answer.working.map((line) => {
-      const { formula, result: shown } = formatLine(line, answer.working)
-      return words.step({ what: sayLine(of, line), formula, result: shown.text })
-    }),
+    working: formatWorking(answer).map(({ line, formula, result: shown }) =>
+      words.step({ what: sayLine(of, line), formula, result: shown.text }),
+    ),
   }
 }
 

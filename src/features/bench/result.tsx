@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
-import { formatCell, formatFigure, formatLine, formatRange } from '../../../shared/bench/present.ts'
+import { formatCell, formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
 import type { FormattedQuantity } from '../../../shared/domain/quantities/formatted-quantity.ts'
 import { sources } from '../../../shared/domain/sources.ts'
@@ -62,20 +62,14 @@ export function ResultGrounds({
   /** Stands between the working and the sources. */
   children?: ReactNode
 }) {
-  const { working, schedule } = answer
-  const [answered] = answer.figures
-  const at = working.findLastIndex((line) => line.value === answered.value)
-  const resultKey = working[at === -1 ? working.length - 1 : at]?.key
-  const rows = working.map((line) => {
-    const { formula, result } = formatLine(line, working)
-    return {
-      key: line.key,
-      what: sayLine(of, line),
-      formula,
-      result: <LongQuantity of={result} />,
-      kind: line.key === resultKey ? ('sum' as const) : ('line' as const),
-    }
-  })
+  const { schedule } = answer
+  const rows = formatWorking(answer).map(({ line, formula, result, isResult }) => ({
+    key: line.key,
+    what: sayLine(of, line),
+    formula,
+    result: <LongQuantity of={result} />,
+    kind: isResult ? ('sum' as const) : ('line' as const),
+  }))
   return (
     <>
       {sortCautions(answer.cautions.map((one) => ({ ...one, text: sayCaution(of, one) }))).map((caution) => (

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { line } from '../../../shared/bench/line.ts'
-import { formatLine } from '../../../shared/bench/present.ts'
+import { formatLine, formatWorking } from '../../../shared/bench/present.ts'
 import { ask } from './ask.ts'
 
 const shown = (text: string) => text.replaceAll('\u00a0', ' ')
@@ -9,6 +9,23 @@ describe('a line of working as it is shown', () => {
   it('shortens what the arithmetic made, and no figure that somebody typed or printed', () => {
     const made = line('y', '2000 L * (32.285714285714285 - 29.57142857142857) / 999.842594', 1, 'L')
     expect(shown(formatLine(made, [made]).formula)).toBe('2,000 L × (32.29 − 29.57) ÷ 999.842594')
+  })
+
+  it('keeps the digits of the result, which stands rounded above it', async () => {
+    const answer = await ask('bath-dose', {
+      target: '75 mg/L',
+      basis: 'active',
+      volume: '1000 L',
+      volumeError: '5 percent',
+      form: 'liquid',
+      strength: '396.1 mg/mL',
+      strengthOf: 'active',
+    })
+    const lines = formatWorking(answer)
+    expect(lines.filter(({ isResult }) => isResult)).toHaveLength(1)
+    // 75,000 mg ÷ 396.1 mg/mL, by hand (21 CFR 529.1150 states the strength)
+    expect(shown(lines.find(({ isResult }) => isResult)?.result.text ?? '')).toBe('189.3461247 mL')
+    expect(answer.figures[0].rounded).toBe('189')
   })
 
   it('leaves no such figure in a plan of several days', async () => {
