@@ -133,6 +133,28 @@ describe('the result on a phone', () => {
   })
 })
 
+describe('a long figure on a phone', () => {
+  it('stays within the sheet', async () => {
+    const page = await open('/bench/unit-conversion')
+    await fillExample(page)
+    await page.getByRole('region', { name: 'Result' }).getByText('378.5411784').first().waitFor()
+    await expectSound(page, 'a figure of ten digits')
+    await page.goto(`${app.url}/bench/wash-out`)
+    await page
+      .getByLabel('What to find', { exact: true })
+      .selectOption({ label: 'What is left after a time' })
+    for (const [name, value] of [
+      ['Net volume of the water', '1000'],
+      ['Flow of clean water', '25'],
+      ['Concentration at the start', '10'],
+      ['Time that it flows', '3000'],
+    ] as const)
+      await page.getByRole('textbox', { name: new RegExp(`^${name}`) }).fill(value)
+    await page.getByRole('img', { name: /^Curve:/ }).waitFor()
+    await expectSound(page, 'a figure of thirty zeros')
+  })
+})
+
 describe('the result on a desk', () => {
   it('stands beside the fields, and not at the foot as well', async () => {
     const page = await open('/bench/bath-dose', deskSize)

@@ -6,7 +6,7 @@ import { formatFigure } from '../../../shared/bench/present.ts'
 import { say } from '../../../shared/bench/words.ts'
 import { benchResultWords as words } from '../../../shared/messages/bench-result.ts'
 import { Icon } from '../../ui/icon.tsx'
-import { Quantity } from '../../ui/quantity.tsx'
+import { LongQuantity } from './long-quantity.tsx'
 import { sayEvaluation, warningsIn } from './result-said.tsx'
 import { useKeyboardInset } from './use-keyboard-inset.ts'
 
@@ -37,7 +37,7 @@ export function ResultBar({
           <span className="bench-bar-figure">
             <span>{say(of, `result.${figure.key}`)}</span>
             <b>
-              <Quantity of={formatFigure(figure)} size="strong" />
+              <LongQuantity of={formatFigure(figure)} size="strong" />
             </b>
           </span>
         ) : (

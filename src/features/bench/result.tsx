@@ -3,14 +3,23 @@ import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
 import { formatCell, formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
+import type { FormattedQuantity } from '../../../shared/domain/quantities/formatted-quantity.ts'
 import { sources } from '../../../shared/domain/sources.ts'
 import { benchSheetWords as words, sourceMarks } from '../../../shared/messages/bench-sheet.ts'
 import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
-import { Quantity } from '../../ui/quantity.tsx'
 import { WorkingBlock } from '../../ui/working-block.tsx'
+import { LongQuantity } from './long-quantity.tsx'
 
-/** More than this does not fit the width of a phone in the size of a dose. */
-const longestLarge = 10
+/** CSS px of a digit and of a letter of the unit in each size, and the room that a phone of 390 has for both. */
+const widths = { dose: [36, 19], mid: [20, 12] } as const
+const roomPx = 330
+
+/** The largest size in which the figure stands in one line on a phone; the smallest may break within its digits. */
+function sizeOf({ number, symbol }: FormattedQuantity): 'dose' | 'mid' | 'strong' {
+  const fits = ([digit, letter]: readonly [number, number]) =>
+    number.length * digit + symbol.length * letter <= roomPx
+  return fits(widths.dose) ? 'dose' : fits(widths.mid) ? 'mid' : 'strong'
+}
 
 /** The result with its range, and the figures that were worked out with it. */
 export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: BenchAnswer }) {
@@ -21,7 +30,7 @@ export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: Bench
     <>
       <p className="t-label">{say(of, `result.${result.key}`)}</p>
       <p>
-        <Quantity of={shown} size={shown.text.length > longestLarge ? 'mid' : 'dose'} />
+        <LongQuantity of={shown} size={sizeOf(shown)} />
       </p>
       {ends ? (
         <p data-quantity="dose">{words.between({ low: ends.low.text, high: ends.high.text })}</p>
@@ -32,7 +41,7 @@ export function ResultFigures({ of, answer }: { of: AnyCalculator; answer: Bench
             <div key={figure.key}>
               <dt>{say(of, `result.${figure.key}`)}</dt>
               <dd>
-                <Quantity of={formatFigure(figure)} size="strong" />
+                <LongQuantity of={formatFigure(figure)} size="strong" />
               </dd>
             </div>
           ))}
@@ -58,7 +67,7 @@ export function ResultGrounds({
     key: line.key,
     what: sayLine(of, line),
     formula,
-    result: <Quantity of={result} />,
+    result: <LongQuantity of={result} />,
     kind: isResult ? ('sum' as const) : ('line' as const),
   }))
   return (
