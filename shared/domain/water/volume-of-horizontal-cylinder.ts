@@ -25,7 +25,8 @@ export function volumeOfHorizontalCylinder(
   const entered = read.value.depth
   if (entered.value > diameter.value * waterLimits.sameLength)
     return refuse('deeper-than-shape', `${place.path}depth`)
-  const depth = entered.value > diameter.value ? diameter : entered
+  // Full to the top, the last binary digit of two units decides nothing: the arcsine is steep there.
+  const depth = entered.value * waterLimits.sameLength >= diameter.value ? diameter : entered
   const { key, params } = place
   const areaKey = `${key}-area`
   const squareMetres = circleSegmentArea(diameter.value / 2, depth.value)

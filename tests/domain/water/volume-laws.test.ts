@@ -108,6 +108,24 @@ describe('laws of volumes', () => {
     )
   })
 
+  it('a lying cylinder full to the top is borne out, whatever units its diameter and its depth are in', async () => {
+    const inchesIn = { in: 1, cm: 2.54, mm: 25.4, m: 0.0254, ft: 1 / 12 }
+    const forms = Object.entries(inchesIn) as [UnitOf<'length'>, number][]
+    for (const inches of [0.5, 3, 7.1, 10, 23.5, 37, 48.5, 60, 96.3, 120])
+      for (const [unit, factor] of forms)
+        for (const [depthUnit, depthFactor] of forms) {
+          const result = volumeOfShape({
+            shape: 'horizontal-cylinder',
+            diameter: quantityOf(Number((inches * factor).toPrecision(14)), unit),
+            length: m(1000),
+            depth: quantityOf(Number((inches * depthFactor).toPrecision(14)), depthUnit),
+          })
+          if (!result.ok) throw new Error(`${result.refusal.code} ${result.refusal.field}`)
+          close(result.value.litres, (Math.PI / 4) * (inches * 0.0254) ** 2 * 1000, 1e-12)
+          expect(await verifyWorking(result.value.lines)).toEqual({ ok: true })
+        }
+  })
+
   it('the whole worksheet conserves water: net + displaced = gross = the sum of the parts', async () => {
     const errorPercent = fc.integer({ min: 0, max: 30 })
     await fc.assert(

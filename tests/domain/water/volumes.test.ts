@@ -147,6 +147,29 @@ describe('the volume worksheet', () => {
     })
     expect(litresPerCentimetre({ ...tank, depth: q('0', 'm') })).toMatchObject({ ok: false })
   })
+
+  it('tells it of water barely deeper than a centimetre, too', () => {
+    const tank = { shape: 'rectangular', length: m('1'), width: m('1') } as const
+    for (const depth of [q('10.0001', 'mm'), q('1.00001', 'cm'), q('0.03281', 'ft'), q('0.3937008', 'in')])
+      expect(litresPerCentimetre({ ...tank, depth })).toEqual({ ok: true, value: expect.closeTo(10, 9) })
+  })
+
+  it('tells it of a tub where the water stands, which is wider than its mean', () => {
+    const tub = {
+      shape: 'truncated-cone',
+      topDiameter: m('1'),
+      bottomDiameter: m('0.5'),
+      depth: m('0.5'),
+    } as const
+    // what is gone when the water stands a centimetre lower, 0.99 m across
+    const lower = volumeOfShape({ ...tub, topDiameter: m('0.99'), depth: m('0.49') })
+    const [full, worth] = [volumeOfShape(tub), litresPerCentimetre(tub)]
+    expect(worth.ok && worth.value).toBeCloseTo(
+      full.ok && lower.ok ? full.value.litres - lower.value.litres : NaN,
+      9,
+    )
+    expect(worth.ok && worth.value).toBeCloseTo(7.776, 3)
+  })
 })
 
 describe('bad input to the worksheet', () => {
