@@ -50,7 +50,7 @@ export function parseQuantity<D extends Dimension>(
     return refuse('dimensions-differ', field, { from: unit.value, to: canonical })
   const converted = convert(number.value.value, unit.value, canonical)
   if (!converted.ok) return refuse(converted.refusal.code, field, { unit: unit.value })
-  const value = converted.value
+  const value = onTheLimit(converted.value, rules)
 
   const limit = (code: 'not-above-zero' | 'below-least' | 'above-most', limitValue: number) => {
     const shown = convert(limitValue, canonical, unit.value)
@@ -66,4 +66,18 @@ export function parseQuantity<D extends Dimension>(
     unit: canonicalUnit[rules.dimension],
     entered: { value: number.value.text, unit: unit.value as UnitOf<D> },
   })
+}
+
+/** The arithmetic of two scales differs in its last digit: 28.4 °F is −2.0000000000000004 °C, and no colder than −2. */
+const lastDigit = 1e-14
+
+/** A value that a conversion put just outside an inclusive limit is that limit. */
+function onTheLimit(
+  value: number,
+  { min, max }: { min?: number | undefined; max?: number | undefined },
+): number {
+  for (const limit of [min, max])
+    if (limit !== undefined && Math.abs(value - limit) <= lastDigit * Math.max(1, Math.abs(limit)))
+      return limit
+  return value
 }

@@ -185,8 +185,8 @@ export const unitTable = {
   mmHg: row('pressure', 'mmHg', [133_322_387_415, 1_000_000_000_000], 0),
   /** Conventional inch of mercury: 3386.388640341 Pa. */
   inHg: row('pressure', 'inHg', [3_386_388_640_341, 1_000_000_000_000], 2),
-  /** Pound-force per square inch: 0.45359237 kg × 9.80665 m/s² ÷ (0.0254 m)², to the last digit of a double. */
-  psi: row('pressure', 'psi', [6_894_757_293_168, 1_000_000_000_000], 1),
+  /** Pound-force per square inch: 0.45359237 kg × 9.80665 m/s² ÷ (0.0254 m)². */
+  psi: row('pressure', 'psi', [8_896_443_230_521, 1_290_320_000_000], 1),
 
   // alkalinity, canonical meq/L; 100.086 and 56.077 g/mol are calcium carbonate and calcium oxide
   'meq/L': row('alkalinity', 'meq/L', [1, 1], 2),

@@ -202,4 +202,23 @@ describe('a typed quantity', () => {
       }),
     )
   })
+
+  it('takes a value exactly on a limit in whatever unit it is typed', () => {
+    // 28.4 °F is −2 °C and 104 °F is 40 °C; converted, the first comes out a binary digit colder
+    const water = { dimension: 'temperature', min: -2, max: 40 } as const
+    for (const [value, celsius] of [
+      ['28.4', -2],
+      ['104', 40],
+    ] as const)
+      expect(parseQuantity({ value, unit: 'degF' }, water)).toMatchObject({
+        ok: true,
+        value: { value: celsius },
+      })
+    expect(parseQuantity({ value: '28.39', unit: 'degF' }, water)).toMatchObject({
+      refusal: { code: 'below-least' },
+    })
+    expect(parseQuantity({ value: '104.000001', unit: 'degF' }, water)).toMatchObject({
+      refusal: { code: 'above-most' },
+    })
+  })
 })
