@@ -49,12 +49,15 @@ export function sayCaution(of: AnyCalculator, caution: BenchCaution): string {
   return caution.code === 'range-not-known' ? benchWords.rangeNotKnown : caution.code
 }
 
+/** "What to find" and "How it is changed" take no article in a sentence. */
+const clause = /^(what|how|where|which|whether|who|when)\b/
+
 /** "the target in the water": an input's name within a sentence. */
 export function nameInSentence(of: AnyCalculator, input: string): string {
   const name = say(of, `input.${input}`)
   const second = name.charAt(1)
   const word = second === second.toLowerCase() ? name.charAt(0).toLowerCase() + name.slice(1) : name
-  return benchWords.the({ what: word })
+  return clause.test(word) ? word : benchWords.the({ what: word })
 }
 
 /** Why there is no number, and what to do. */

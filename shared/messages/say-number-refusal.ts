@@ -47,7 +47,7 @@ function wordsOf(refusal: Refusal, label: string | undefined): RefusalWords {
     what,
     What: what.charAt(0).toUpperCase() + what.slice(1),
     example: example === undefined ? '' : `, for example ${example}`,
-    inUnit: known === undefined ? '' : ` in ${unitNames[known]}`,
+    inUnit: known === undefined || unitOf(known).symbol === '' ? '' : ` in ${unitNames[known]}`,
     unit: known === undefined ? '' : unitOf(known).symbol,
     said: (key) => String(refusal.params?.[key] ?? ''),
   }

@@ -58,6 +58,16 @@ describe.each(each)('%s', (_, of) => {
     expect(of.sources.length).toBeGreaterThan(0)
   })
 
+  it('asks for what is missing in whole sentences', () => {
+    const evaluation = evaluate(of, {})
+    const said = evaluation.ok ? [] : evaluation.refusals.map((refusal) => sayRefusal(of, refusal))
+    expect(said.length).toBeGreaterThan(0)
+    for (const sentence of said) {
+      expect(sentence).toMatch(/^[A-Z].*\.$/)
+      expect(sentence).not.toMatch(/the (what|how|where|which|whether|who|when)\b|in a plain number|\.\./)
+    }
+  })
+
   it('names only inputs that it has in its limits, choices and aliases', () => {
     const names = Object.keys(of.inputs)
     const named = Object.values(of.inputs).flatMap((input) => [
