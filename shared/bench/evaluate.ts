@@ -4,7 +4,7 @@ import type { SourceKey } from '../domain/sources.ts'
 import { convert } from '../domain/units/convert.ts'
 import type { ParsedQuantity } from '../domain/units/parse-quantity.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
-import type { AnyCalculator, BenchCaution, Given, Outcome } from './definition.ts'
+import type { AnyCalculator, BenchCaution, Figure, Given, Outcome } from './definition.ts'
 import type { Input, QuantityInput } from './inputs.ts'
 import { readInputs, type Read } from './read-inputs.ts'
 import { roundFigure, type RoundedFigure } from './round-figure.ts'
@@ -38,7 +38,9 @@ export function evaluate(of: AnyCalculator, body: unknown): Evaluation {
   const outcome = ask(of, read)
   if (!outcome.ok) return outcome
   const { figures, working, schedule } = outcome.value
-  const range = outcome.value.range ? { known: true, value: outcome.value.range } : rangeOf(of, read)
+  const range = outcome.value.range
+    ? { known: true, value: outcome.value.range }
+    : rangeOf(of, read, figures[0])
   const [first, ...rest] = figures
   const halfWidth = range.known && range.value ? (range.value.high - range.value.low) / 2 : null
   return {
@@ -96,6 +98,7 @@ const lastDigit = 1e-12
 function rangeOf(
   of: AnyCalculator,
   read: Read,
+  result: Figure,
 ): { known: boolean; value: { low: number; high: number } | null } {
   const errors = statedErrors(of, read).filter(({ name }) => typeof read[name] === 'object')
   if (errors.length === 0) return { known: true, value: null }
@@ -106,7 +109,11 @@ function rangeOf(
       moved[name] = scaled(read[name] as ParsedQuantity, 1 + ((corner >> index) & 1 ? share : -share))
     const outcome = ask(of, moved)
     if (!outcome.ok) return { known: false, value: null }
-    values.push(outcome.value.figures[0].value)
+    // a calculator may go over from grams to kilograms between the ends: the range is in the unit of the result
+    const [figure] = outcome.value.figures
+    const value = convert(figure.value, figure.unit, result.unit)
+    if (!value.ok) return { known: false, value: null }
+    values.push(value.value)
   }
   const [low, high] = [Math.min(...values), Math.max(...values)]
   // an error of something that this answer does not go by: "0.9 g to 0.9 g" says nothing

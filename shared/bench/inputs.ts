@@ -25,6 +25,8 @@ export interface QuantityInput {
   limits?: Limits
   /** A whole number: fish, changes, sides. */
   whole?: true
+  /** A change or a difference, to which the doubts about a value of its unit do not apply. */
+  difference?: true
   optional?: true
   /** Stable code of the refusal when it is left empty, where more is to be said than that; its sentence is `refusal.<code>`. */
   missing?: string

@@ -2,17 +2,30 @@ import { formatDose } from '../domain/quantities/format-dose.ts'
 import { formatExpression } from '../domain/quantities/format-expression.ts'
 import { formatReading } from '../domain/quantities/format-reading.ts'
 import { formatWorkingValue } from '../domain/quantities/format-working-value.ts'
-import type { FormattedQuantity } from '../domain/quantities/formatted-quantity.ts'
+import type { FormattedQuantity, QuantityKind } from '../domain/quantities/formatted-quantity.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
+import type { UnitCode } from '../domain/units/unit-table.ts'
 import type { BenchLine, Schedule } from './definition.ts'
 import type { BenchAnswer } from './evaluate.ts'
 import { roundFigure, type RoundedFigure } from './round-figure.ts'
 
 /** A figure as it is shown: a dose without trailing zeros, everything else with the digits that it is worth. */
 export function formatFigure(figure: RoundedFigure): FormattedQuantity {
+  if (isResidue(figure.value)) return nextToNothing(figure.value, figure.unit, figure.kind)
   return figure.kind === 'dose'
     ? formatDose(figure.rounded, figure.unit)
     : formatReading({ value: figure.rounded, unit: figure.unit })
+}
+
+/** What is left of something after days of washing: no instrument and no animal tells it from nothing. */
+const leastShown = '0.000000001'
+
+const isResidue = (value: number): boolean => value !== 0 && Math.abs(value) < Number(leastShown)
+
+function nextToNothing(value: number, unit: UnitCode, kind: QuantityKind = 'reading'): FormattedQuantity {
+  const least = formatDose(leastShown, unit)
+  const sign = value > 0 ? '< ' : '> \u2212'
+  return { ...least, kind, number: sign + least.number, text: sign + least.text }
 }
 
 /** The ends of a range, to one digit more than the result has. */
@@ -39,7 +52,8 @@ export function formatLine(
   )
   for (const [number] of line.expression.matchAll(/\d+\.\d+/g))
     if (number.replace('.', '').replace(/^0+/, '').length >= madeDigits) earlier.add(number)
-  return { formula: formatExpression(line.expression, earlier), result: formatWorkingValue(line) }
+  const result = isResidue(line.value) ? nextToNothing(line.value, line.unit) : formatWorkingValue(line)
+  return { formula: formatExpression(line.expression, earlier), result }
 }
 
 /** A line of a whole working. */
@@ -64,7 +78,7 @@ export function formatWorking({ figures, working }: Pick<BenchAnswer, 'figures' 
   return working.map((line, index) => {
     const { formula, result } = formatLine(line, working)
     const isResult = index === at
-    return { line, formula, result: isResult ? unrounded(line) : result, isResult }
+    return { line, formula, result: isResult && !isResidue(line.value) ? unrounded(line) : result, isResult }
   })
 }
 

@@ -1,4 +1,5 @@
 import { ok, refuse, type Refusal, type Result } from '../domain/result.ts'
+import { readsAsSpecificGravity } from '../domain/seawater/specific-gravity.ts'
 import { findUnit } from '../domain/units/find-unit.ts'
 import { parseQuantity, type ParsedQuantity } from '../domain/units/parse-quantity.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
@@ -30,7 +31,7 @@ export function isAsked(when: When | undefined, body: unknown): boolean {
  * @param body anything at all
  * @returns what the calculator's `compute` takes
  * @refuses every input at fault, not only the first: as parseQuantity · not-whole · not-chosen or the choice's own code ·
- *          not-an-option · not-asked for a name that the calculator does not know
+ *          not-an-option · not-asked for a name that the calculator does not know · specific-gravity-as-salinity
  */
 export function readInputs(of: AnyCalculator, body: unknown): { read: Read; refusals: Refusal[] } {
   const read: Read = {}
@@ -79,9 +80,15 @@ function readQuantity(
   if (dimension === undefined) return refuse('unknown-unit', name)
   const parsed = parseQuantity({ value: digitsOf(value), unit }, { ...input.limits, dimension, field: name })
   if (!parsed.ok) return parsed
+  if (isSalinity(parsed.value, input) && readsAsSpecificGravity(parsed.value.value))
+    return refuse('specific-gravity-as-salinity', name)
   if (input.whole && !Number.isInteger(parsed.value.value)) return refuse('not-whole', name)
   return parsed
 }
+
+/** A salinity of a water, not a difference between two. */
+const isSalinity = ({ unit }: ParsedQuantity, { difference }: QuantityInput): boolean =>
+  !difference && (unit === 'PSS-78' || unit === 'g/kg')
 
 const isOf = (dimension: Dimension, typed: unknown): boolean => {
   const unit = findUnit(typed, { dimension })

@@ -69,6 +69,7 @@ export function sayRefusal(of: AnyCalculator, refusal: Refusal): string {
   if (refusal.code === 'not-chosen') return benchWords.notChosen({ what: name ?? '' })
   if (refusal.code === 'not-an-option') return benchWords.notAnOption({ what: name ?? '' })
   if (refusal.code === 'not-whole') return benchWords.notWhole({ what: name ?? '' })
+  if (refusal.code === 'specific-gravity-as-salinity') return benchWords.gravityAsSalinity
   if (refusal.code === 'not-asked') return benchWords.notAsked
   if (refusal.code === 'result-not-finite') return benchWords.resultNotFinite
   return isNumberRefusalCode(refusal.code)

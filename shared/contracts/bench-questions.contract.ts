@@ -21,7 +21,7 @@ export const askQuarantineClock = contract({
     asOf: z.union([LocalDate, Instant]).describe('Day or instant asked about; a day is asked at its end'),
     quarantineKind: z.enum(quarantineKinds).describe('Quarantine kind of the batch'),
     policy: AskedPolicy.optional(),
-    events: z.array(AskedEvent).max(2000).describe('What happened, in any order'),
+    events: z.array(AskedEvent).max(500).describe('What happened, in any order'),
   }),
   reply: {
     200: z.object({

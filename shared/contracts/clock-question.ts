@@ -30,7 +30,7 @@ const Criterion = z
       criterionId: Id.describe('Name of the criterion'),
       kind: z.literal('negatives').describe('Negative results in a row'),
       testKey: Id.describe('Which results count: those with the same key'),
-      count: z.int().min(1).max(100).describe('How many in a row'),
+      count: z.int().min(1).max(10).describe('How many in a row'),
       daysApart: Days.describe('Least days from one sample to the next'),
       daysAfterMasking: Days.describe('Least days of the last after the last masking treatment'),
     }),
@@ -49,7 +49,7 @@ const policyFields = {
   maskingWindowDays: Days.describe('Days after a treatment that hides what the tests look for'),
   transportDeathHours: Hours.describe('Hours after arrival within which a death is put down to the journey'),
   temperaturePauseHours: Hours.describe('A temperature spell pauses the clock when it lasts longer'),
-  criteria: z.array(Criterion).max(100).describe('What has to be met before clearance'),
+  criteria: z.array(Criterion).max(10).describe('What has to be met before clearance'),
 }
 export const WholePolicy = z.strictObject(policyFields).describe('How days are counted')
 export const AskedPolicy = WholePolicy.partial().describe(

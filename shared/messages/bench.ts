@@ -8,6 +8,8 @@ export const benchWords = defineMessages({
   notChosen: (p: { what: string }) => `Choose ${p.what}.`,
   notAnOption: (p: { what: string }) => `Choose ${p.what} from the list.`,
   notWhole: (p: { what: string }) => `Type ${p.what} as a whole number.`,
+  gravityAsSalinity:
+    'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
   notAsked: 'This calculator asks for nothing by that name. Leave it out, or check how it is spelled.',
   resultNotFinite:
     'The result is too large or too small to mean anything. Check the figures and their units.',

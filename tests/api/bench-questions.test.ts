@@ -115,6 +115,37 @@ describe('the quarantine clock of the bench', () => {
       '/events/2',
       'sample-taken-after-report',
     ],
+    [
+      'a void of an event that is none',
+      { events: [...arrived, { at: '2026-03-02T09:00:00Z', kind: 'voided', voidsEventId: 'u' }] },
+      '/events/2/voidsEventId',
+      'unknown-event',
+    ],
+    [
+      'a void of itself',
+      {
+        events: [...arrived, { eventId: 'v', at: '2026-03-02T09:00:00Z', kind: 'voided', voidsEventId: 'v' }],
+      },
+      '/events/2/voidsEventId',
+      'unknown-event',
+    ],
+    [
+      'the end of a pause that never began',
+      { events: [...arrived, { at: '2026-03-02T09:00:00Z', kind: 'pause-ended', pauseId: 'p' }] },
+      '/events/2/pauseId',
+      'unknown-pause',
+    ],
+    [
+      'a criterion that the policy lacks',
+      {
+        events: [
+          ...arrived,
+          { at: '2026-03-02T09:00:00Z', kind: 'criterion-declared', criterionId: 'fat', met: true },
+        ],
+      },
+      '/events/2/criterionId',
+      'unknown-criterion',
+    ],
   ])('refuses %s, saying where', async (_, change, pointer, code) => {
     const reply = await post('quarantine-clock', { ...question, ...change })
     expect(reply.status).toBe(422)
@@ -134,6 +165,34 @@ describe('the quarantine clock of the bench', () => {
     const reply = await post('quarantine-clock', { ...question, ...change })
     expect([400, 422]).toContain(reply.status)
     expect(reply.body.code).toBe('bad-input')
+  })
+
+  it('answers the largest question that it takes without holding up anybody else', async () => {
+    const criteria = Array.from({ length: 10 }, (_, at) => ({
+      criterionId: `c${String(at)}`,
+      kind: 'negatives',
+      testKey: 't',
+      count: 10,
+      daysApart: 0,
+      daysAfterMasking: 0,
+    }))
+    const results = Array.from({ length: 498 }, (_, at) => ({
+      at: new Date(Date.UTC(2026, 2, 2) + at * 60_000).toISOString(),
+      kind: 'sample-result',
+      sampleId: String(at),
+      testKey: 't',
+      takenAt: '2026-03-01T12:00:00Z',
+      result: at % 7 === 6 ? 'positive' : 'negative',
+    }))
+    const begin = performance.now()
+    const reply = await post('quarantine-clock', {
+      ...question,
+      asOf: '2026-04-30',
+      policy: { criteria },
+      events: [...arrived, ...results],
+    })
+    expect(reply.status).toBe(200)
+    expect(performance.now() - begin).toBeLessThan(3000)
   })
 
   it('has no day while nothing happened', async () => {

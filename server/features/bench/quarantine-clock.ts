@@ -20,7 +20,8 @@ const caseId = 'batch'
 /**
  * The clock of one batch, from what is said about it and nothing else.
  *
- * @throws Problem not-computable: unknown-zone, duplicate-event, sample-taken-after-report
+ * @throws Problem not-computable: unknown-zone, duplicate-event, unknown-event, unknown-pause, unknown-criterion,
+ *         sample-taken-after-report
  */
 export function answerQuarantineClock(asked: Asked): ReplyOf<typeof askQuarantineClock> {
   const { zone, quarantineKind } = asked
@@ -37,6 +38,7 @@ export function answerQuarantineClock(asked: Asked): ReplyOf<typeof askQuarantin
       throw refused(`/events/${index}/eventId`, 'duplicate-event', benchQuestionWords.duplicateEvent)
     names.add(eventId)
   }
+  refuseUnknownReferences(events, policy)
   const question = {
     cases: [{ caseId, quarantineKind, policy }],
     events,
@@ -55,6 +57,38 @@ export function answerQuarantineClock(asked: Asked): ReplyOf<typeof askQuarantin
       ? benchQuestionWords.sampleTakenAfterReport
       : benchQuestionWords.notUnderstood,
   )
+}
+
+/** Which of an event's fields names another event. */
+const references = [
+  'voidsEventId',
+  'deathEventId',
+  'extensionEventId',
+  'lockEventId',
+  'exposureEventId',
+  'forResultEventId',
+] as const
+
+/** A slip in a name would leave a lock lifted or a death unexplained without a word: every name has to lead somewhere. */
+function refuseUnknownReferences(events: readonly ClockEvent[], policy: ClockPolicy): void {
+  const names = new Set(events.map(({ eventId }) => eventId))
+  const pauses = new Set(events.map((event) => (event.kind === 'pause-started' ? event.pauseId : '')))
+  const policies = events.flatMap((event) => (event.kind === 'protocol-changed' ? [event.policy] : []))
+  const criteria = new Set(
+    [policy, ...policies].flatMap((one) => one.criteria.map(({ criterionId }) => criterionId)),
+  )
+  for (const [index, event] of events.entries()) {
+    const fields: Partial<Record<string, unknown>> = { ...event }
+    const named = references.find((field) => {
+      const name = fields[field]
+      return typeof name === 'string' && (name === event.eventId || !names.has(name))
+    })
+    if (named) throw refused(`/events/${index}/${named}`, 'unknown-event', benchQuestionWords.unknownEvent)
+    if (event.kind === 'pause-ended' && !pauses.has(event.pauseId))
+      throw refused(`/events/${index}/pauseId`, 'unknown-pause', benchQuestionWords.unknownPause)
+    if (event.kind === 'criterion-declared' && !criteria.has(event.criterionId))
+      throw refused(`/events/${index}/criterionId`, 'unknown-criterion', benchQuestionWords.unknownCriterion)
+  }
 }
 
 const endOfDay = (date: string, zone: string) =>

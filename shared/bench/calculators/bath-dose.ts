@@ -70,7 +70,7 @@ export const bathDose = defineCalculator({
     { code: 'second', level: 'note' },
   ],
   carries: [{ to: 'order', target: 'target', basis: 'basis', division: 'division' }],
-  published: ['bath_product_volume_mL', 'bath_product_mass', 'bath_product_mass_g', 'topup_dose_mg'],
+  published: ['bath_product_volume_mL', 'bath_product_mass', 'bath_product_mass_g'],
   compute(given) {
     const { target, basis, volume, present, division } = given
     const measure: Measure | undefined = division && { division: division.entered }

@@ -60,7 +60,11 @@ export const dripAcclimation = defineCalculator({
       limits: { min: 0, max: 120, plausible: { max: 42 } },
       reading: 'salinity',
     }),
-    near: quantity({ units: scales, limits: { above: 0, max: 120, plausible: { max: 5 } } }),
+    near: quantity({
+      difference: true,
+      units: scales,
+      limits: { above: 0, max: 120, plausible: { max: 5 } },
+    }),
     duration: quantity({
       units: ['min', 'h'],
       limits: { above: 0, max: 100_000 },

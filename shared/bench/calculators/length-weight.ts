@@ -164,7 +164,6 @@ export const lengthWeight = defineCalculator({
     'condition_factor_K',
     'relative_condition_Kn',
     'condition_factor_K_from_english',
-    'a_from_other_units',
   ],
   compute({ find, lengthType, length, weight, english, coefficientUnits: units, a, b, tableLength }) {
     if (find === 'english' && english) return fromEnglish(english)

@@ -82,7 +82,12 @@ export const salinityChange = defineCalculator({
       optional: true,
       errorOf: 'volume',
     }),
-    perDay: quantity({ units: ['PSS-78'], limits: { above: 0, max: 42 }, when: { way: ['steps'] } }),
+    perDay: quantity({
+      units: ['PSS-78'],
+      difference: true,
+      limits: { above: 0, max: 42 },
+      when: { way: ['steps'] },
+    }),
   },
   fields: {
     startSalinity: 'start',

@@ -106,7 +106,12 @@ export const saltMass = defineCalculator({
       when: { by: ['per-kilogram'] },
       reading: 'temperature',
     }),
-    perDay: quantity({ units: ['g/L', 'g/kg', 'PSS-78'], limits: { above: 0 }, optional: true }),
+    perDay: quantity({
+      units: ['g/L', 'g/kg', 'PSS-78'],
+      difference: true,
+      limits: { above: 0 },
+      optional: true,
+    }),
     purity: quantity({
       units: ['percent_w_w'],
       limits: { above: 0, min: 0.1, max: 100, plausible: { min: 50 } },

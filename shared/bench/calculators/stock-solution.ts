@@ -120,7 +120,7 @@ export const stockSolution = defineCalculator({
     { code: 'label', level: 'warning' },
     { code: 'second', level: 'note' },
   ],
-  published: ['stock_volume_mL_simple', 'stock_volume_mL_exact', 'priming_dose_mL'],
+  published: ['stock_volume_mL_simple', 'stock_volume_mL_exact'],
   compute(given) {
     const { find, stockStrength, basis, stockVolume, target, volume, way, division } = given
     if (find === 'use') {

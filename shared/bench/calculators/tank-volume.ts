@@ -134,7 +134,6 @@ export const tankVolume = defineCalculator({
     'volume_spherical_cap_L',
     'volume_hemisphere_L',
     'volume_horizontal_cylinder_L',
-    'fill_percent_horizontal_cylinder',
     'pipe_volume_L',
     'system_volume_L',
   ],

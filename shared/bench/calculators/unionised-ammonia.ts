@@ -99,12 +99,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     { code: 'kit', level: 'note' },
   ],
   plot: { vary: 'ph', unit: 'pH', from: 6.5, to: 9, figure: 'nh3-n' },
-  published: [
-    'unionized_ammonia_fraction',
-    'unionized_ammonia_concentration',
-    'unionized_ammonia_fraction_clegg_whitfield',
-    'ammonium_pKa_freshwater',
-  ],
+  published: ['unionized_ammonia_fraction', 'unionized_ammonia_concentration', 'ammonium_pKa_freshwater'],
   compute({ total, totalOf, ph, temperature, salinity, calibration }) {
     const water = {
       ph: ph.value,

@@ -43,6 +43,9 @@ export const unitConversion = defineCalculator({
   sources: ['nist-sp-811', 'iupac-weights'],
   published: ['unit_conversion'],
   compute({ from, to }) {
+    const { unit } = from.entered
+    if (from.value < 0 && unitOf(unit).dimension !== 'temperature')
+      return refuse('below-least', 'from', { limit: '0', unit })
     const answer = convert(Number(from.entered.value), from.entered.unit, to)
     if (!answer.ok)
       return answer.refusal.code === 'dimensions-differ' ? refuse('dimensions-differ', 'to') : answer

@@ -77,7 +77,6 @@ export const washOut = defineCalculator({
   published: [
     'turnovers_to_fraction_remaining',
     'time_to_fraction_remaining_min',
-    'percent_replaced_after_turnovers',
     'well_mixed_concentration',
   ],
   compute({ find, volume, flow, removed, initial, elapsed }) {

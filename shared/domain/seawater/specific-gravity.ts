@@ -90,6 +90,7 @@ function salinityOfDensity(
   const rounding = 1e-9
   if (density < seawaterDensity68(0, temperature68C) - rounding)
     return refuse('lighter-than-fresh-water', field)
+  if (density <= seawaterDensity68(0, temperature68C) + rounding) return ok(0)
   if (density > seawaterDensity68(mostSalinity, temperature68C) + rounding)
     return refuse('salinity-above-scale', field, { limit: mostSalinity, unit: 'PSS-78' })
   let [low, high] = [0, mostSalinity]

@@ -115,6 +115,19 @@ describe('a tricaine bath', () => {
 })
 
 describe('dechlorination', () => {
+  it('gives its range in the unit of the result, also where grams become kilograms', async () => {
+    // 200 mg/L × 700 L × 7.4 = 1,036 g, ± 5 % of the volume: 0.984…1.088 kg (by hand)
+    const { figures, range } = await ask('dechlorination', {
+      water: 'spent-disinfectant',
+      form: 'pentahydrate',
+      chlorine: '200 mg/L',
+      volume: '700 L',
+      volumeError: '5 percent',
+    })
+    expect(figures[0]).toMatchObject({ unit: 'kg', rounded: '1.04' })
+    expect(range?.low).toBeCloseTo(0.9842, 4)
+    expect(range?.high).toBeCloseTo(1.0878, 4)
+  })
   const given = {
     water: 'spent-disinfectant',
     form: 'pentahydrate',

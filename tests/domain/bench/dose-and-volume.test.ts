@@ -163,6 +163,7 @@ describe('unit conversion', () => {
   it('refuses to join two kinds', () => {
     expect(refusalsOf('unit-conversion', { from: '1 mg/L', to: 'kg' })).toEqual(['to dimensions-differ'])
     expect(refusalsOf('unit-conversion', { from: '1 ppm', to: 'mg/L' })).toEqual(['from bare-ppm'])
+    expect(refusalsOf('unit-conversion', { from: '-5 L', to: 'mL' })).toEqual(['from below-least'])
     expect(refusalsOf('unit-conversion', { from: '-500 degF', to: 'degC' })).toEqual([
       'from below-absolute-zero',
     ])

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { line } from '../../../shared/bench/line.ts'
-import { formatLine, formatWorking } from '../../../shared/bench/present.ts'
+import { formatFigure, formatLine, formatWorking } from '../../../shared/bench/present.ts'
 import { ask } from './ask.ts'
 
 const shown = (text: string) => text.replaceAll('\u00a0', ' ')
@@ -26,6 +26,14 @@ describe('a line of working as it is shown', () => {
     // 75,000 mg ÷ 396.1 mg/mL, by hand (21 CFR 529.1150 states the strength)
     expect(shown(lines.find(({ isResult }) => isResult)?.result.text ?? '')).toBe('189.3461247 mL')
     expect(answer.figures[0].rounded).toBe('189')
+  })
+
+  it('says of a residue that it is less than anything that matters', async () => {
+    const left = { find: 'left', volume: '1000 L', flow: '25 L/min', initial: '25 mg/L', elapsed: '2 d' }
+    const answer = await ask('wash-out', left)
+    expect(answer.figures[0].value).toBeGreaterThan(0)
+    expect(shown(formatFigure(answer.figures[0]).text)).toBe('< 0.000000001 mg/L')
+    for (const { result } of formatWorking(answer)) expect(result.text.length).toBeLessThan(20)
   })
 
   it('leaves no such figure in a plan of several days', async () => {

@@ -84,6 +84,9 @@ describe('specific gravity', () => {
       0.00002,
     )
   })
+  it('of 1.000 at the reference temperature is salinity 0, and nothing near it', async () => {
+    expect((await ask('specific-gravity', { ...given, gravity: '1.000 SG' })).figures[0].value).toBe(0)
+  })
   it('warns of a scale for brine', async () => {
     const { cautions } = await ask('specific-gravity', { ...given, instrument: 'brine' })
     expect(cautions.map((one) => one.code)).toContain('brine')
