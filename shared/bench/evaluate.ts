@@ -131,6 +131,18 @@ function implausible(of: AnyCalculator, read: Read): BenchCaution[] {
   return Object.entries(of.inputs).flatMap(([name, input]): BenchCaution[] => {
     const given = read[name]
     if (input.kind !== 'quantity' || typeof given !== 'object') return []
+    if (
+      input.units[0] === 'percent_w_w' &&
+      given.entered.unit === 'percent_w_w' &&
+      isFraction(given.entered.value)
+    )
+      return [
+        {
+          code: 'fraction-as-percent',
+          level: 'warning',
+          params: { input: name, shown: formatReading(given.entered).text },
+        },
+      ]
     const band = (input as QuantityInput).limits?.plausible
     if (band === undefined) return []
     const { min = -Infinity, max = Infinity } = band
@@ -145,6 +157,9 @@ function implausible(of: AnyCalculator, read: Read): BenchCaution[] {
     ]
   })
 }
+
+/** 0.98 typed for 98 %. */
+const isFraction = (digits: string): boolean => Number(digits) > 0 && Number(digits) <= 1
 
 function bandText({ unit, entered }: ParsedQuantity, min: number, max: number): string {
   const shown = (value: number) => {

@@ -35,6 +35,8 @@ export interface QuantityInput {
   errorOf?: string
   /** The newest reading of this parameter fills it when an enclosure is chosen. */
   reading?: ReadingParameter
+  /** What such a reading says about choices, which it answers where it fills the field: nitrogen is always as N. */
+  readingSays?: Readonly<Record<string, string>>
   /** The volume that the enclosure is dosed by fills it. */
   netVolume?: true
 }

@@ -3,6 +3,7 @@ import { formatExpression } from '../domain/quantities/format-expression.ts'
 import { formatReading } from '../domain/quantities/format-reading.ts'
 import { formatWorkingValue } from '../domain/quantities/format-working-value.ts'
 import type { FormattedQuantity, QuantityKind } from '../domain/quantities/formatted-quantity.ts'
+import { convert } from '../domain/units/convert.ts'
 import { quantityOf } from '../domain/units/quantity-of.ts'
 import type { UnitCode } from '../domain/units/unit-table.ts'
 import type { BenchLine, Schedule } from './definition.ts'
@@ -73,13 +74,21 @@ const unroundedDigits = 10
  * digits, so that both can be compared.
  */
 export function formatWorking({ figures, working }: Pick<BenchAnswer, 'figures' | 'working'>): ShownLine[] {
-  const last = working.findLastIndex((line) => line.value === figures[0].value)
-  const at = last === -1 ? working.length - 1 : last
+  const [result] = figures
+  const byName = working.findLastIndex((line) => line.key === result.key && isSame(line, result))
+  const byValue = working.findLastIndex((line) => isSame(line, result))
+  const at = [byName, byValue, working.length - 1].find((each) => each >= 0)
   return working.map((line, index) => {
     const { formula, result } = formatLine(line, working)
     const isResult = index === at
     return { line, formula, result: isResult && !isResidue(line.value) ? unrounded(line) : result, isResult }
   })
+}
+
+/** A line may be in grams where the result is in kilograms. */
+function isSame(line: BenchLine, result: RoundedFigure): boolean {
+  const there = convert(line.value, line.unit, result.unit)
+  return there.ok && Math.abs(there.value - result.value) <= 1e-12 * Math.abs(result.value)
 }
 
 function unrounded({ value, unit }: BenchLine): FormattedQuantity {

@@ -70,6 +70,9 @@ function readQuantity(
     (typeof value === 'string' && value.trim() === '')
   if (blank && input.optional) return ok(undefined)
   if (blank && input.missing !== undefined) return refuse(input.missing, name)
+  // asked for in the unit that stands in the field
+  const asked = input.units.find((each) => each === own(given, 'unit')) ?? input.units[0]
+  if (blank && asked !== undefined) return refuse('blank', name, { unit: asked })
   const dimensions = [...new Set(input.units.map((unit) => unitOf(unit).dimension))]
   const unit = own(given, 'unit')
   // "mg/kg" is a code of its own and also how people write milligrams per kilogram of feed: the code goes first

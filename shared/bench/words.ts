@@ -46,6 +46,11 @@ export function sayCaution(of: AnyCalculator, caution: BenchCaution): string {
       shown: String(params.shown),
       band: String(params.band),
     })
+  if (caution.code === 'fraction-as-percent')
+    return benchWords.fractionAsPercent({
+      what: nameInSentence(of, String(params.input)),
+      shown: String(params.shown),
+    })
   return caution.code === 'range-not-known' ? benchWords.rangeNotKnown : caution.code
 }
 

@@ -9,7 +9,7 @@ export const benchPaper = defineMessages({
   asked: 'Asked',
   range: (p: { low: string; high: string }) => `${p.low} to ${p.high}, by the stated errors`,
   working: 'Working',
-  schedule: 'Day by day',
+  schedule: 'Step by step',
   noSteps: 'No steps.',
   cautions: 'Cautions',
   sources: 'Sources',

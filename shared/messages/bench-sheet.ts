@@ -17,7 +17,7 @@ export const benchSheetWords = defineMessages({
   startHere: 'Fill in the fields; the figure follows as you type.',
   between: (p: { low: string; high: string }) => `${p.low} to ${p.high}, by the stated errors`,
   working: 'Working',
-  schedule: 'Day by day',
+  schedule: 'Step by step',
   sources: (p: { count: number }) => `Sources (${String(p.count)})`,
   clear: 'Empty the fields',
   example: 'Fill in an example',

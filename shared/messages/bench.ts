@@ -15,6 +15,8 @@ export const benchWords = defineMessages({
     'The result is too large or too small to mean anything. Check the figures and their units.',
   notPlausible: (p: { what: string; shown: string; band: string }) =>
     `${p.what.charAt(0).toUpperCase()}${p.what.slice(1)} is ${p.shown}; ${p.band} is usual. Check the number and its unit.`,
+  fractionAsPercent: (p: { what: string; shown: string }) =>
+    `${p.what.charAt(0).toUpperCase()}${p.what.slice(1)} is ${p.shown}, which makes the amount a hundred times and more. If a share such as 0.98 was meant, type 98.`,
   rangeNotKnown: 'The stated errors are so large that no range can be given.',
   range: (p: { low: string; high: string }) => `${p.low} to ${p.high}`,
   disagrees:

@@ -66,15 +66,22 @@ export function undrawableCharacters(text: string): string[] {
 }
 
 /**
- * Free text with each undrawable character spelled out as "[U+1F41F]", for documents that must come out whatever
+ * Free text with each undrawable character as its plain form ("NH3" for a lowered 3) or spelled out as "[U+1F41F]", for documents that must come out whatever
  * somebody once typed (a history, a chart). Never for a signed text: its print would differ from what was signed.
  */
 export function spellUndrawable(text: string): string {
   const missing = undrawableCharacters(text)
   return missing.reduce(
-    (spelled, character) => spelled.replaceAll(character, `[${codePointName(character)}]`),
+    (spelled, character) => spelled.replaceAll(character, plainForm(character)),
     drawnForm(text),
   )
+}
+
+/** A raised or lowered digit or sign has a plain one; anything else is named. */
+function plainForm(character: string): string {
+  const plain = character.normalize('NFKC')
+  const drawable = plain !== character && undrawableCharacters(plain).length === 0
+  return drawable ? plain : `[${codePointName(character)}]`
 }
 
 /** "U+1F41F" */

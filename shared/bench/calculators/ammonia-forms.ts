@@ -39,6 +39,7 @@ export const ammoniaForms = defineCalculator({
       units: ['mg/L', 'ug/L'],
       limits: { min: 0, max: 1000, plausible: { max: 20 } },
       reading: 'total-ammonia-n',
+      readingSays: { of: 'n' },
     }),
     of: choice(ammoniaBases, { missing: 'ammonia-basis-not-stated' }),
     as: choice(ammoniaBases),

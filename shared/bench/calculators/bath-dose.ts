@@ -32,7 +32,7 @@ export const bathDose = defineCalculator({
     ...basisWords,
     ...volumeWords,
     ...productWords,
-    'input.present': 'Already in the water, by a test',
+    'input.present': 'Concentration there already, by a test',
     'input.division': 'Smallest step of the balance or measure',
     'result.amount': 'Product to add',
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',

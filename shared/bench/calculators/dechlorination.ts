@@ -35,7 +35,7 @@ export const dechlorination = defineCalculator({
     'input.chlorine': 'Total chlorine by a test',
     'help.chlorine': 'Measured, free and combined together. What the waterworks says is no reading.',
     'input.chlorineError': 'Error of the test',
-    'input.chloramine': 'Of it monochloramine, as Cl₂',
+    'input.chloramine': 'Monochloramine in it, as Cl₂',
     'input.volume': 'Volume of the water',
     'input.volumeError': 'Error of the volume',
     'result.amount': 'Thiosulfate to weigh',

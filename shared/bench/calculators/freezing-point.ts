@@ -25,7 +25,7 @@ export const freezingPoint = defineCalculator({
     ...specificGravityWords,
     name: 'Freezing point of sea water',
     purpose: 'When sea water freezes, and how far the coldest spot of a chilled system is from it.',
-    formula: 'freezing point = (−0.0575 + 0.001710523 × √salinity − 0.0002154996 × salinity) × salinity',
+    formula: 'freezing point = (−0.0575 + 0.001710523 × salinity^0.5 − 0.0002154996 × salinity) × salinity',
     'input.salinity': 'Salinity',
     'help.salinity': 'From 4 to 40. Fresh water freezes at 0 °C.',
     'input.coldest': 'Coldest spot that the water touches',

@@ -32,7 +32,7 @@ export const repeatedDoses = defineCalculator({
     'option.find.half-life': 'The half-life that two tests show',
     'input.dose': 'What one dose adds',
     'help.dose': 'As a rise of the concentration, all doses on one basis.',
-    'input.present': 'In the water before the first dose',
+    'input.present': 'Concentration before the first dose',
     'input.interval': 'Time from one dose to the next',
     'input.doses': 'Number of doses',
     'input.changed': 'Share of the water changed between two doses',

@@ -53,6 +53,8 @@ export const specificGravity = defineCalculator({
       'This is lighter than fresh water at that temperature. Check both temperatures.',
     'refusal.salinity-above-scale': 'This would be a salinity above 42, where the scale ends.',
     'caution.brine': 'A scale for brine reads about 1.5 too high in sea water near 35 (from memory).',
+    'caution.compensated':
+      'A refractometer that compensates for temperature already shows what it would at its reference temperature: then type that as the temperature of the water.',
     'caution.low': 'Below a salinity of 2 a hydrometer says little; use a conductivity meter.',
     'caution.instrument': 'Check the instrument against a standard solution, and rinse it with fresh water.',
   }),
@@ -118,6 +120,9 @@ export const specificGravity = defineCalculator({
       figures: find === 'salinity' ? [salt, dense] : [sg, dense],
       working: workingOf(found.value, temperature.value, reference.value),
       cautions: [
+        ...(instrument === 'brine' || instrument === 'seawater'
+          ? [{ code: 'compensated', level: 'warning' as const }]
+          : []),
         ...(instrument === 'brine' ? [{ code: 'brine', level: 'warning' as const }] : []),
         ...(found.value < 2 ? [{ code: 'low', level: 'warning' as const }] : []),
       ],

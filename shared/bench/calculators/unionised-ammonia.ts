@@ -8,7 +8,8 @@ import { ok } from '../../domain/result.ts'
 import { enteredTerm } from '../../domain/working/entered-term.ts'
 import { valueTerm } from '../../domain/working/value-term.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
-import { defineCalculator, type BenchLine } from '../definition.ts'
+import type { UnitCode } from '../../domain/units/unit-table.ts'
+import { defineCalculator, type BenchLine, type Figure } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
 import { asNitrogenTerm, fromNitrogenTerm } from './parts/ammonia-terms.ts'
@@ -39,7 +40,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     'result.nh3-n': 'Un-ionised ammonia, as nitrogen',
     'result.share': 'Un-ionised share',
     'result.nh3': 'Un-ionised ammonia, as NH₃',
-    'result.cautious': 'If the pH is on the total scale, as nitrogen',
+    'result.cautious': 'Un-ionised ammonia at the most, as nitrogen',
     'line.kelvin': 'Temperature in kelvin',
     'line.nitrogen': 'Total ammonia as nitrogen',
     'line.pk-fresh': 'pK in fresh water (Emerson)',
@@ -67,6 +68,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
       units: ['mg/L', 'ug/L'],
       limits: { min: 0, max: 1000, plausible: { max: 20 } },
       reading: 'total-ammonia-n',
+      readingSays: { totalOf: 'n' },
     }),
     totalOf: choice(ammoniaBases, { missing: 'ammonia-basis-not-stated' }),
     ph: quantity({
@@ -121,24 +123,15 @@ export const unionisedAmmoniaCalculator = defineCalculator({
         : undefined
     if (cautious && !cautious.ok) return cautious
     const percent = fraction * 100
+    const figures = [
+      reading('nh3-n', free),
+      reading('share', percent, 'percent'),
+      reading('nh3', ammonia.value),
+    ] as const
     const salt = constant === 'emerson' ? [] : (['electrode', 'constant'] as const)
     return ok({
-      figures: [
-        { key: 'nh3-n', value: free, unit: 'mg/L', figures: 3, kind: 'reading' },
-        { key: 'share', value: percent, unit: 'percent', figures: 3, kind: 'reading' },
-        { key: 'nh3', value: ammonia.value, unit: 'mg/L', figures: 3, kind: 'reading' },
-        ...(cautious
-          ? [
-              {
-                key: 'cautious',
-                value: cautious.value.nMgPerL,
-                unit: 'mg/L',
-                figures: 3,
-                kind: 'reading',
-              } as const,
-            ]
-          : []),
-      ],
+      // while the scale is not known the higher figure is the one to act on
+      figures: cautious ? [reading('cautious', cautious.value.nMgPerL), ...figures] : figures,
       working: [
         line('nitrogen', `${asNitrogenTerm(enteredTerm(total), totalOf)} to mg/L`, nitrogen, 'mg/L'),
         ...pkLines(found.value, water),
@@ -166,6 +159,14 @@ export const unionisedAmmoniaCalculator = defineCalculator({
       sources: constant === 'emerson' ? ['emerson-1975'] : ['clegg-whitfield-1995', 'ph-scale-rule'],
     })
   },
+})
+
+const reading = (key: string, value: number, unit: UnitCode = 'mg/L'): Figure => ({
+  key,
+  value,
+  unit,
+  figures: 3,
+  kind: 'reading',
 })
 
 const pkKey = { emerson: 'pk-fresh', free: 'pk-free', total: 'pk-total' } as const

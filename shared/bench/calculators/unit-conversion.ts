@@ -53,7 +53,7 @@ export const unitConversion = defineCalculator({
     const caution = dimension === 'temperatureDifference' ? 'temperature' : 'basis'
     const concentration = dimension === 'massConcentration' || dimension === 'volumeConcentration'
     return ok({
-      figures: [{ key: 'converted', value: answer.value, unit: to, figures: 10 }],
+      figures: [{ key: 'converted', value: answer.value, unit: to, figures: 10, kind: 'dose' }],
       working: workingOf(from, to, answer.value),
       ...(caution === 'temperature' || concentration
         ? { cautions: [{ code: caution, level: 'note' as const }] }

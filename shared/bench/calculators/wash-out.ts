@@ -38,6 +38,8 @@ export const washOut = defineCalculator({
     'line.left': 'Concentration left',
     'caution.lower-bound':
       'A tank has dead corners: this is the least time. Confirm it by a test before animals or water go on.',
+    'caution.more-left':
+      'A tank has dead corners: more may be left than this. Confirm it by a test before animals or water go on.',
     'caution.plug-flow':
       'Raceways do not mix like a tank, and carbon, ozone, UV or a skimmer remove drugs faster.',
   }),
@@ -69,10 +71,7 @@ export const washOut = defineCalculator({
     removed: { value: '95', unit: 'percent' },
   },
   sources: ['stirred-tank'],
-  cautions: [
-    { code: 'lower-bound', level: 'warning' },
-    { code: 'plug-flow', level: 'note' },
-  ],
+  cautions: [{ code: 'plug-flow', level: 'note' }],
   plot: { vary: 'elapsed', unit: 'min', from: 0, to: 480, figure: 'left' },
   published: [
     'turnovers_to_fraction_remaining',
@@ -97,6 +96,7 @@ export const washOut = defineCalculator({
           { key: 'left', value: left.value, unit: 'mg/L' },
           { key: 'share-left', value: share * 100, unit: 'percent' },
         ],
+        cautions: [{ code: 'more-left', level: 'warning' }],
         working: [
           line(
             'share-left',
@@ -125,6 +125,7 @@ export const washOut = defineCalculator({
         { key: 'time', value: minutes.value, unit: 'min' },
         { key: 'turnovers', value: turnovers.value, unit: 'ratio' },
       ],
+      cautions: [{ code: 'lower-bound', level: 'warning' }],
       working: [
         line('turnovers', `-log(1 - ${String(percent)} / 100)`, turnovers.value, 'ratio'),
         line(

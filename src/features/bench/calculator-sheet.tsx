@@ -5,8 +5,10 @@ import { evaluate } from '../../../shared/bench/evaluate.ts'
 import { say, sayRefusal } from '../../../shared/bench/words.ts'
 import { benchSheetWords as words } from '../../../shared/messages/bench-sheet.ts'
 import { paths } from '../../lib/paths.ts'
+import { quantityTools } from '../../lib/quantity-tools.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
+import { QuantityToolsContext } from '../../ui/quantity-context.ts'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { bodyOf, draftLeft, emptyDraft, enclosureLeft, exampleDraft, isUntouched } from './bench-draft.ts'
 import type { Draft } from './bench-draft.ts'
@@ -20,6 +22,9 @@ import { ResultBar } from './result-bar.tsx'
 import { ResultSaid } from './result-said.tsx'
 import { ResultFigures, ResultGrounds } from './result.tsx'
 import { useEnclosureWater } from './use-enclosure-water.ts'
+
+/** Elsewhere a bare gallon is that of the facility; a figure of the bench may go to anybody, and is asked which it is. */
+const benchTools = quantityTools()
 
 /** One calculator: its fields, and the figure as one types, by the same code that the server answers with. */
 export function CalculatorSheet({ of }: { of: AnyCalculator }) {
@@ -47,67 +52,69 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
     return refusal && filled(name) ? sayRefusal(of, refusal) : undefined
   }
   return (
-    <Sheet recipe="order" className="bench-sheet">
-      <Area>
-        <Cartouche
-          place={<Link to={paths.bench()}>{words.title}</Link>}
-          title={say(of, 'name')}
-          source={say(of, 'purpose')}
-        />
-        <div className="pane stack">
-          <p className="t-2">{words.decisionSupport}</p>
-          <div className="row row-wrap">
-            <Button size="small" onClick={() => startAgain(exampleDraft(of))}>
-              {words.example}
-            </Button>
-            <Button size="small" kind="plain" onClick={() => startAgain(emptyDraft(of, rememberedUnits()))}>
-              {words.clear}
-            </Button>
-          </div>
-        </div>
-      </Area>
-      <Area className="pane stack">
-        <EnclosureField of={of} water={water} />
-        <InputFields
-          of={of}
-          draft={draft}
-          onChange={setDraft}
-          wrong={wrong}
-          noteOf={(name) => water.note(name, draft[name])}
-        />
-        {untouched ? null : <ResultBar of={of} evaluation={evaluation} result={result} />}
-      </Area>
-      <Area className="bench-result">
-        <ResultSaid of={of} evaluation={evaluation} untouched={untouched} />
-        <section ref={result} tabIndex={-1} className="net-volume" aria-label={words.result}>
-          <h2 className="t-label">{words.result}</h2>
-          {evaluation.ok ? (
-            <ResultFigures of={of} answer={evaluation.answer} />
-          ) : (
-            <>
-              <p className="sea-name">{words.notYet}</p>
-              {untouched ? (
-                <p>{words.startHere}</p>
-              ) : (
-                <ul className="bench-asked">
-                  {refusals.map((one) => (
-                    <li key={`${one.field ?? ''} ${one.code}`}>{sayRefusal(of, one)}</li>
-                  ))}
-                </ul>
-              )}
-            </>
-          )}
-        </section>
-        {evaluation.ok ? (
+    <QuantityToolsContext value={benchTools}>
+      <Sheet recipe="order" className="bench-sheet">
+        <Area>
+          <Cartouche
+            place={<Link to={paths.bench()}>{words.title}</Link>}
+            title={say(of, 'name')}
+            source={say(of, 'purpose')}
+          />
           <div className="pane stack">
-            <ResultGrounds of={of} answer={evaluation.answer}>
-              <BenchPlot of={of} body={drawnBody} />
-            </ResultGrounds>
-            <PrintButton of={of} draft={draft} />
-            <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
+            <p className="t-2">{words.decisionSupport}</p>
+            <div className="row row-wrap">
+              <Button size="small" onClick={() => startAgain(exampleDraft(of))}>
+                {words.example}
+              </Button>
+              <Button size="small" kind="plain" onClick={() => startAgain(emptyDraft(of, rememberedUnits()))}>
+                {words.clear}
+              </Button>
+            </div>
           </div>
-        ) : null}
-      </Area>
-    </Sheet>
+        </Area>
+        <Area className="pane stack">
+          <EnclosureField of={of} water={water} />
+          <InputFields
+            of={of}
+            draft={draft}
+            onChange={setDraft}
+            wrong={wrong}
+            noteOf={(name) => water.note(name, draft[name])}
+          />
+          {untouched ? null : <ResultBar of={of} evaluation={evaluation} result={result} />}
+        </Area>
+        <Area className="bench-result">
+          <ResultSaid of={of} evaluation={evaluation} untouched={untouched} />
+          <section ref={result} tabIndex={-1} className="net-volume" aria-label={words.result}>
+            <h2 className="t-label">{words.result}</h2>
+            {evaluation.ok ? (
+              <ResultFigures of={of} answer={evaluation.answer} />
+            ) : (
+              <>
+                <p className="sea-name">{words.notYet}</p>
+                {untouched ? (
+                  <p>{words.startHere}</p>
+                ) : (
+                  <ul className="bench-asked">
+                    {refusals.map((one) => (
+                      <li key={`${one.field ?? ''} ${one.code}`}>{sayRefusal(of, one)}</li>
+                    ))}
+                  </ul>
+                )}
+              </>
+            )}
+          </section>
+          {evaluation.ok ? (
+            <div className="pane stack">
+              <ResultGrounds of={of} answer={evaluation.answer}>
+                <BenchPlot of={of} body={drawnBody} />
+              </ResultGrounds>
+              <PrintButton of={of} draft={draft} />
+              <CarryPane of={of} draft={draft} answer={evaluation.answer} water={water} />
+            </div>
+          ) : null}
+        </Area>
+      </Sheet>
+    </QuantityToolsContext>
   )
 }

@@ -31,6 +31,8 @@ export interface FoundFigure {
   says(when: string): string
   /** Set once it is older than it may be. */
   oldAt(now: string): string | null
+  /** Answers of choices that go with it. */
+  answers?: Readonly<Record<string, string>>
 }
 
 const volumeFigures = 6
@@ -99,6 +101,7 @@ function readingFigure(
         ...(row.below ? [words.readingBelow] : fill ? [] : [words.readingUnit]),
       ].join(' '),
     oldAt: (now) => (minutesBetween(row.happenedAt, now) > minutes ? words.readingOld({ minutes }) : null),
+    ...(input.readingSays ? { answers: input.readingSays } : {}),
   }
 }
 
@@ -195,7 +198,9 @@ export function withEnclosureFigures(
     if (typeof given !== 'object') continue
     const earlier = before[name]
     const isTyped = given.value.trim() !== '' && !(earlier && isFilledBy(earlier, given))
-    if (!isTyped) next[name] = found[name]?.fill ?? { value: '', unit: given.unit }
+    if (isTyped) continue
+    next[name] = found[name]?.fill ?? { value: '', unit: given.unit }
+    if (found[name]?.fill) Object.assign(next, found[name].answers)
   }
   return next
 }

@@ -13,7 +13,9 @@ describe('wash-out', () => {
   it('leaves 13.72 mg/L of 25 after an hour at 20 L/min in 2,000 L', async () => {
     // check value flow.02 (computed, against an ODE solver)
     const left = { find: 'left', volume: '2 m3', flow: '1200 L/h', initial: '25 mg/L', elapsed: '1 h' }
-    expect((await ask('wash-out', left)).figures[0].value).toBeCloseTo(13.72029, 4)
+    const { figures, cautions } = await ask('wash-out', left)
+    expect(figures[0].value).toBeCloseTo(13.72029, 4)
+    expect(cautions.map((one) => one.code)).toEqual(['more-left', 'plug-flow'])
   })
   it.each([
     ['no flow', { flow: '0 L/min' }, 'flow not-above-zero'],

@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest'
+import { calculatorAt } from '../../../shared/bench/calculators.ts'
+import { evaluate } from '../../../shared/bench/evaluate.ts'
 import { line } from '../../../shared/bench/line.ts'
 import { formatFigure, formatLine, formatWorking } from '../../../shared/bench/present.ts'
 import { ask } from './ask.ts'
@@ -26,6 +28,28 @@ describe('a line of working as it is shown', () => {
     // 75,000 mg ÷ 396.1 mg/mL, by hand (21 CFR 529.1150 states the strength)
     expect(shown(lines.find(({ isResult }) => isResult)?.result.text ?? '')).toBe('189.3461247 mL')
     expect(answer.figures[0].rounded).toBe('189')
+  })
+
+  it('marks the line of the result by its name, whatever its unit', async () => {
+    const asked = {
+      water: 'spent-disinfectant',
+      form: 'pentahydrate',
+      chlorine: '200 mg/L',
+      volume: '1000 L',
+    }
+    const answer = await ask('dechlorination', asked)
+    const marked = formatWorking(answer).filter(({ isResult }) => isResult)
+    expect(marked.map(({ line: { key } }) => key)).toEqual([answer.figures[0].key])
+    expect(answer.figures[0].unit).toBe('kg')
+  })
+
+  it('asks for a figure in the unit that stands in the field, and doubts a share typed as a percentage', async () => {
+    const of = calculatorAt('injection')
+    const empty = of && evaluate(of, { ...of.example, weight: { value: '', unit: 'kg' } })
+    expect(empty?.ok === false && empty.refusals[0]).toMatchObject({ code: 'blank', params: { unit: 'kg' } })
+    const salt = { target: '0.2 mg/L', targetOf: 'copper', product: 'pentahydrate', volume: '11400 L' }
+    const { cautions } = await ask('copper-sulfate', { ...salt, purity: '0.98 percent_w_w' })
+    expect(cautions.map((one) => one.code)).toContain('fraction-as-percent')
   })
 
   it('says of a residue that it is less than anything that matters', async () => {

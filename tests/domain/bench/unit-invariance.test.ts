@@ -101,7 +101,10 @@ function substance({ figures, range, schedule, cautions }: BenchAnswer) {
   const [{ unit: first }] = figures
   return {
     names: figures.map(({ key, unit }) => `${key} ${unitOf(unit).dimension}`),
-    cautions: cautions.map(({ code, level }) => `${level} ${code}`),
+    // a share typed as a percentage is a doubt about the digits, not about the figure
+    cautions: cautions
+      .filter(({ code }) => code !== 'fraction-as-percent')
+      .map(({ code, level }) => `${level} ${code}`),
     numbers: [
       ...figures.map(({ value, unit }) => canonical(value, unit)),
       ...(range ? [canonical(range.low, first), canonical(range.high, first)] : []),

@@ -32,9 +32,9 @@ describe('un-ionised ammonia', () => {
       ph: '8 pH',
       calibration: 'unknown',
     })
-    expect(Math.abs(figures[0].value - 0.044)).toBeLessThanOrEqual(0.00006)
-    expect(figures[3]?.key).toBe('cautious')
-    expect(Math.abs((figures[3]?.value ?? 0) - 0.0556)).toBeLessThanOrEqual(0.00006)
+    expect(figures.map(({ key }) => key)).toEqual(['cautious', 'nh3-n', 'share', 'nh3'])
+    expect(Math.abs(figures[0].value - 0.0556)).toBeLessThanOrEqual(0.00006)
+    expect(Math.abs((figures[1]?.value ?? 0) - 0.044)).toBeLessThanOrEqual(0.00006)
     expect(cautions.find((one) => one.code === 'scale-not-known')?.level).toBe('warning')
     const inFresh = await ask('un-ionised-ammonia', { ...fresh, calibration: 'unknown' })
     expect(inFresh.figures).toHaveLength(3)
@@ -86,6 +86,13 @@ describe('specific gravity', () => {
   })
   it('of 1.000 at the reference temperature is salinity 0, and nothing near it', async () => {
     expect((await ask('specific-gravity', { ...given, gravity: '1.000 SG' })).figures[0].value).toBe(0)
+  })
+  it('asks of a refractometer whether it compensates for temperature', async () => {
+    const cold = { ...given, instrument: 'seawater', temperature: '10 degC' }
+    const { cautions } = await ask('specific-gravity', cold)
+    expect(cautions.find((one) => one.code === 'compensated')?.level).toBe('warning')
+    const hydrometer = await ask('specific-gravity', { ...cold, instrument: 'hydrometer' })
+    expect(hydrometer.cautions.map((one) => one.code)).not.toContain('compensated')
   })
   it('warns of a scale for brine', async () => {
     const { cautions } = await ask('specific-gravity', { ...given, instrument: 'brine' })
