@@ -102,6 +102,13 @@ describe('a bath by volume', () => {
     const weighed = { ...given, target: '25 mg/L', density: '1.08 g/mL' }
     expect(await warningsOf('bath-dose', weighed)).not.toContain('formalin')
   })
+  it('says it of a make-up dose too', async () => {
+    const change = { ...given, after: 'change', changed: '500 L' }
+    expect(await warningsOf('make-up-dose', change)).toEqual(['taken-at-target', 'formalin'])
+    const strong = await warningsOf('make-up-dose', { ...change, target: '2.5 mL/L' })
+    expect(strong).toEqual(['taken-at-target', 'above-labels', 'formalin'])
+    expect(await said('make-up-dose', change, 'formalin')).toMatch(/white precipitate/)
+  })
   it('is doubted above the highest figure of a label', async () => {
     for (const target of ['2001 uL/L', '25 mL/L', '0.25 percent_v_v'])
       expect(await warningsOf('bath-dose', { ...given, target })).toContain('above-labels')
