@@ -53,6 +53,7 @@ export const workingLabels = defineMessages({
   'stock-volume-used': () => 'Volume of the stock',
   'kept-share': () => 'Share still there',
   'left-after-change': () => 'Left after the change',
+  'reading-as-compound': () => 'What was found, as the compound',
   'rise-needed': () => 'Rise needed',
   'active-needed': () => 'Active substance needed',
   'strength-from-w-v': () => 'Strength from % w/v',

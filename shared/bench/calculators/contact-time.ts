@@ -65,6 +65,9 @@ export const contactTime = defineCalculator({
       'The residual is what a test finds at the end of the contact. What was dosed is used up on the way.',
     'caution.factor-from-memory':
       'The baffling factor is a grade from memory. A tracer test of this chamber is worth more.',
+    'caution.ozone-in-sea-water':
+      'Ozone in sea water makes bromine and bromate (common practice, from memory): measure total residual oxidants.',
+    'caution.under-treatment': 'Do not feed an oxidant into a system under drug treatment.',
     'caution.temperature': 'The same CT does less in cold water, at another pH, or against another organism.',
   }),
   inputs: {
@@ -128,9 +131,11 @@ export const contactTime = defineCalculator({
     flow: { value: '100', unit: 'L/min' },
     baffling: 'average',
   },
-  sources: ['epa-contact-time'],
+  sources: ['epa-contact-time', 'ozone-practice'],
   cautions: [
     { code: 'end-of-contact', level: 'note' },
+    { code: 'ozone-in-sea-water', level: 'warning' },
+    { code: 'under-treatment', level: 'warning' },
     { code: 'temperature', level: 'note' },
   ],
   plot: { vary: 'flow', unit: 'L/min', from: 20, to: 400, figure: 'ct' },

@@ -1,11 +1,15 @@
+import { exceeds } from '../../domain/cautions/exceeds.ts'
 import { copperInPentahydrate } from '../../domain/dose/copper.ts'
 import { computeBathDose } from '../../domain/dose/compute-bath-dose.ts'
 import { ok, refuse } from '../../domain/result.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
-import { defineCalculator } from '../definition.ts'
+import { defineCalculator, type BenchCaution } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { measuredFigure } from './parts/measured-figure.ts'
 import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
+
+/** Free copper that marine systems are usually kept at. @source ufifas-fa165, the range from memory */
+const usualMgPerL = { low: 0.15, high: 0.2 }
 
 /** Grams of copper sulfate for a target of free copper, or for what a test says is missing. */
 export const copperSulfate = defineCalculator({
@@ -25,6 +29,7 @@ export const copperSulfate = defineCalculator({
     'input.target': 'Target in the water',
     'help.target': 'As the order says. Marine systems are usually kept at 0.15 to 0.2 mg/L of free copper.',
     'input.measured': 'Free copper by a test',
+    'help.measured': 'Of copper, whatever the target is of.',
     'input.volume': 'Net volume of the water',
     'input.volumeError': 'Error of the volume',
     'input.purity': 'Purity of the salt',
@@ -32,8 +37,12 @@ export const copperSulfate = defineCalculator({
     'result.amount': 'Copper sulfate to add',
     'refusal.ionic-target-chelated-product':
       'A target of free copper must not be used for a chelated product. Dose it by its label, in total copper, and test it the way its maker says.',
+    'refusal.reading-at-or-above-target':
+      'The copper that was found is at or above the copper of the target. Nothing is to be added. 1 mg/L of copper is 3.93 mg/L of the pentahydrate.',
     'refusal.copper-basis-not-stated':
       'Choose what the target is of. Copper and copper sulfate differ by 3.93 times.',
+    'caution.above-usual': (p: { low: string; high: string }) =>
+      `More free copper than marine systems are usually kept at, ${p.low} to ${p.high} mg/L (from memory). Read the order again: one decimal place is ten times the copper, which kills.`,
     'caution.invertebrates':
       'Copper kills invertebrates, and sharks, rays and some bony fish at the level of treatment. Rock and sand take it up and give it back later.',
     'caution.steps':
@@ -51,7 +60,6 @@ export const copperSulfate = defineCalculator({
       units: ['mg/L', 'ug/L'],
       limits: { min: 0 },
       optional: true,
-      when: { targetOf: ['copper'] },
       reading: 'copper-free',
     }),
     volume: quantity({ units: volumeUnits, limits: { above: 0 }, netVolume: true }),
@@ -99,13 +107,19 @@ export const copperSulfate = defineCalculator({
         share: copperInPentahydrate,
       },
       ...(measured ? { present: measured.entered } : {}),
+      ...(targetOf === 'compound' ? { presentShare: copperInPentahydrate } : {}),
       ...(division ? { measure: { division: division.entered } } : {}),
     })
     if (!dose.ok) return dose
     const { amount, unit, measured: weighed, working } = dose.value
+    const isAboveUsual = targetOf === 'copper' && exceeds(target.value, usualMgPerL.high)
+    const cautions: BenchCaution[] = isAboveUsual
+      ? [{ code: 'above-usual', level: 'warning', params: usualMgPerL }]
+      : []
     return ok({
       figures: [measuredFigure('amount', amount, unit, weighed)],
       working: withVolumeAsEntered(working, volume),
+      cautions,
     })
   },
 })

@@ -1,3 +1,4 @@
+import { exceeds } from '../../domain/cautions/exceeds.ts'
 import { ok } from '../../domain/result.ts'
 import {
   continuousExchangeLitres,
@@ -20,6 +21,8 @@ const salinity = (more: object = {}) =>
 /** Faster than these is faster than common practice. @source salinity-practice */
 const usualDown = 4
 const usualUp = 3
+/** Below this the new water is fresh, and the change may be for a dip. */
+const brackishFrom = 0.5
 
 /** Litres to swap for another salinity: at once, day by day at a limit, or running through. */
 export const salinityChange = defineCalculator({
@@ -65,6 +68,10 @@ export const salinityChange = defineCalculator({
       'This replacement water leads the other way. Check the three salinities, or take other water.',
     'caution.faster-than-usual': (p: { usual: string }) =>
       `This is faster than is common practice (${p.usual} a day, no source). The order decides.`,
+    'caution.within-a-day': (p: { usual: string }) =>
+      `Within a day this is more than is common practice (${p.usual} a day, no source). Change it in daily steps, unless the order is for a dip or says otherwise.`,
+    'caution.dip':
+      'For a freshwater dip match the temperature to ±1 °C and the pH to ±0.2, read both before the animals go in, dechlorinate the water and aerate it (from memory).',
     'caution.order': 'Never for sharks, rays or invertebrates without a veterinary order.',
     'caution.measure':
       'Measure again before each step: density is left out here, and a step that came out otherwise moves the next.',
@@ -126,6 +133,7 @@ export const salinityChange = defineCalculator({
       replacementSalinity: replacement.value,
       volumeLitres: volume.value,
     }
+    const cautions = cautionsOfChange(change)
     const water = enteredTerm(volume)
     const [from, to, fresh] = [enteredTerm(start), enteredTerm(target), enteredTerm(replacement)]
     if (way === 'steps' && perDay) {
@@ -144,6 +152,7 @@ export const salinityChange = defineCalculator({
       return ok({
         figures: [{ key: 'litres', value: litres.value, unit: 'L', kind: 'volume' }],
         working: [line('through', expression, litres.value, 'L')],
+        cautions,
       })
     }
     const fraction = swapFraction(change)
@@ -163,9 +172,24 @@ export const salinityChange = defineCalculator({
           'share',
         ]),
       ],
+      cautions,
     })
   },
 })
+
+type Change = Parameters<typeof swapLitres>[0]
+
+/** What is to be said of a change without steps: its size, and the water that it is made with. */
+function cautionsOfChange({ startSalinity, targetSalinity, replacementSalinity }: Change): BenchCaution[] {
+  const whole = targetSalinity - startSalinity
+  const usual = whole < 0 ? usualDown : usualUp
+  return [
+    ...(exceeds(Math.abs(whole), usual)
+      ? [{ code: 'within-a-day', level: 'warning', params: { usual } } as const]
+      : []),
+    ...(replacementSalinity < brackishFrom ? [{ code: 'dip', level: 'warning' } as const] : []),
+  ]
+}
 
 interface Terms {
   water: string

@@ -58,6 +58,7 @@ export const tankVolume = defineCalculator({
     'help.depth': 'From the lowest point of the inside floor to the surface, not the height of the wall.',
     'input.tankError': 'Error of the tank',
     'input.displaced': 'Share displaced by rock and sand',
+    'help.displaced': 'Left open or 0 where nobody measured it.',
     'input.sump': 'Water in the sump, running',
     'input.bore': 'Inner diameter of the pipes',
     'input.pipeLength': 'Length of the pipes',
@@ -150,7 +151,7 @@ export const tankVolume = defineCalculator({
       working,
       ...(errorLitres > 0 ? { range: { low: netLitres - errorLitres, high: netLitres + errorLitres } } : {}),
       cautions: [
-        displaced
+        displaced && displaced.value > 0
           ? { code: 'displacement-guessed', level: 'note' as const }
           : { code: 'displacement-not-measured', level: 'warning' as const },
       ],
@@ -185,7 +186,8 @@ function sheetOf(given: Measured): VolumeSheet {
       bore || pipeLength
         ? [{ key: 'pipes', bore: entered(bore), length: entered(pipeLength), errorPercent: 0 }]
         : [],
-    ...(displaced
+    // a share of 0 is no measurement: it is the same as none
+    ...(displaced && displaced.value > 0
       ? { displacement: { by: 'share' as const, share: displaced.entered, errorPercent: 0 } }
       : {}),
   }

@@ -4,7 +4,7 @@ import type { WorkingLine } from '../working/working-line.ts'
 import { amountFromMass } from './amount-from-mass.ts'
 import { amountFromProduct } from './amount-from-product.ts'
 import type { BathDose } from './bath-dose.ts'
-import type { BathProduct, BathTarget, Measure } from './bath-product.ts'
+import type { BathProduct, BathTarget, Measure, MolarShare } from './bath-product.ts'
 import type { DoseRefusal } from './dose-refusal.ts'
 import { measureAmount } from './measure-amount.ts'
 import { readTarget, type ReadTarget } from './read-target.ts'
@@ -15,8 +15,10 @@ export interface AmountInput {
   volume: WorkingLine
   volumeErrorPercent?: number
   target: BathTarget
-  /** What a reading found in the water already, on the basis of the target. */
+  /** What a reading found in the water already, on the basis of the target unless `presentShare` tells. */
   present?: Quantity
+  /** Where the reading is of a part of what the target is of: copper, of a target of its sulfate. */
+  presentShare?: MolarShare
   product: BathProduct
   measure?: Measure
   /** What is more than this, in mg/L or µL/L, is a slip; unless told, the limit of a bath. */
@@ -31,7 +33,8 @@ export interface AmountInput {
  */
 export function computeAmount(
   input: AmountInput,
-  riseOf: (target: ReadTarget) => Result<Rise, DoseRefusal> = (target) => riseNeeded(target, input.present),
+  riseOf: (target: ReadTarget) => Result<Rise, DoseRefusal> = (target) =>
+    riseNeeded(target, input.present, input.presentShare),
 ): Result<BathDose, DoseRefusal> {
   const { volume, volumeErrorPercent: error, product } = input
   if (error !== undefined && !(error >= 0 && error <= 100)) return refuse('error-outside-range', 'error')

@@ -31,6 +31,54 @@ export function injectionVolume(input: {
   return refused ?? finiteOrRefuse((doseMgPerKg * weightKg) / strengthMgPerMl, 'strengthMgPerMl')
 }
 
+/**
+ * The least and the most that a stated error of the weight and a tolerance of the strength make of a volume.
+ *
+ * @param volumeMl                 mL, above 0
+ * @param errors.weightPercent     0…90
+ * @param errors.strengthPercent   0…90; a weaker solution takes more of it
+ * @returns mL, unrounded
+ * @refuses not-finite · not-above-zero, below-least, above-most
+ */
+export function injectionVolumeRange(
+  volumeMl: number,
+  errors: { weightPercent: number; strengthPercent: number },
+): Result<{ low: number; high: number }, InjectionRefusal> {
+  const { weightPercent, strengthPercent } = errors
+  const refused = checkNumbers([
+    [volumeMl, { field: 'volumeMl', unit: 'mL', above: 0 }],
+    [weightPercent, { field: 'weightPercent', unit: 'percent', min: 0, max: 90 }],
+    [strengthPercent, { field: 'strengthPercent', unit: 'percent', min: 0, max: 90 }],
+  ])
+  if (refused) return refused
+  const [weight, strength] = [weightPercent / 100, strengthPercent / 100]
+  const high = (volumeMl * (1 + weight)) / (1 - strength)
+  return Number.isFinite(high)
+    ? ok({ low: (volumeMl * (1 - weight)) / (1 + strength), high })
+    : refuse('not-finite', 'volumeMl')
+}
+
+/** A volume this much above a whole number of sites, relative, is so in its binary form alone. */
+const leastOfASite = 1e-12
+
+/**
+ * Over how many sites a volume has to be divided so that none gets more than it may.
+ *
+ * @param volumeMl      mL, above 0
+ * @param mostPerSiteMl the largest volume of one site, mL, above 0
+ * @returns a whole number, 1 where the volume is not above that
+ * @refuses not-finite · not-above-zero
+ */
+export function injectionSites(volumeMl: number, mostPerSiteMl: number): Result<number, InjectionRefusal> {
+  const refused = checkNumbers([
+    [volumeMl, { field: 'volumeMl', unit: 'mL', above: 0 }],
+    [mostPerSiteMl, { field: 'mostPerSiteMl', unit: 'mL', above: 0 }],
+  ])
+  if (refused) return refused
+  const sites = Math.max(1, Math.ceil((volumeMl / mostPerSiteMl) * (1 - leastOfASite)))
+  return Number.isFinite(sites) ? ok(sites) : refuse('not-finite', 'mostPerSiteMl')
+}
+
 /** Below this the difference is of the binary form, not of the rounding. */
 const leastErrorPercent = 1e-9
 

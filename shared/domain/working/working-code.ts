@@ -35,6 +35,7 @@ export const workingCodes = [
   'stock-volume-used',
   'kept-share',
   'left-after-change',
+  'reading-as-compound',
   'rise-needed',
   'active-needed',
   'strength-from-w-v',

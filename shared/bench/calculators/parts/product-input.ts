@@ -42,7 +42,8 @@ export const basisInput = choice(['product', ...ofSubstance], { missing: 'basis-
 const form = ['solid', 'liquid'] as const
 const strength = {
   units: ['percent_w_w', 'mg/mL', 'percent_w_v', 'g/L', 'g/mL_w_v'],
-  limits: { above: 0 },
+  // 1,000 mg/mL or 100 % w/v; what is by weight never comes near it
+  limits: { above: 0, plausible: { max: 1_000_000 } },
 } as const
 const tolerance = {
   units: ['percent'],
