@@ -6,6 +6,11 @@ export interface PartError {
   key: string
   litres: number
   errorPercent: number
+  /**
+   * How much of it counts, in percent; all of it unless told. Of tanks of which a fifth is rock, four fifths are water, and
+   * an error of the tanks is one of that water.
+   */
+  countedPercent?: number
 }
 
 /**
@@ -25,10 +30,15 @@ export function combineErrors(
   netLitres: number,
 ): { errorLitres: number; errorPercent: number; lines: WorkingLine[] } {
   const uncertain = parts.filter((part) => part.errorPercent > 0 && part.litres > 0)
-  const each = uncertain.map((part) => (part.litres * part.errorPercent) / 100)
+  const each = uncertain.map(
+    (part) => (((part.litres * part.errorPercent) / 100) * (part.countedPercent ?? 100)) / 100,
+  )
   const errorLitres = Math.sqrt(each.reduce((sum, litres) => sum + litres ** 2, 0))
   const errorPercent = (errorLitres / netLitres) * 100
-  const squares = uncertain.map((part) => `(${valueTerm(part.litres, 'L')} * ${part.errorPercent} / 100)^2`)
+  const squares = uncertain.map((part) => {
+    const counted = part.countedPercent === undefined ? '' : ` * ${String(part.countedPercent)} / 100`
+    return `(${valueTerm(part.litres, 'L')} * ${part.errorPercent} / 100${counted})^2`
+  })
   const lines: WorkingLine[] = [
     {
       key: 'volume-error',

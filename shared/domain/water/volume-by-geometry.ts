@@ -88,7 +88,13 @@ export function volumeByGeometry(
     litresLine('net-volume', 'net-volume', `${valueTerm(grossLitres, 'L')}${less}`, netLitres, netRests),
   )
 
-  const combined = combineErrors(errors, netLitres)
+  const { displacement } = sheet
+  // what is a share of the tanks is larger where they are: their error is counted on the water that is left
+  const countedPercent = displacement?.by === 'share' ? percentLeft(displacedLitres, tankLitres) : undefined
+  const counted = errors.map((part) =>
+    countedPercent !== undefined && tankKeys.includes(part.key) ? { ...part, countedPercent } : part,
+  )
+  const combined = combineErrors(counted, netLitres)
   if (!isErrorPercent(combined.errorPercent)) return refuse('error-above-volume', 'parts')
   working.push(...combined.lines)
   return ok({
@@ -106,3 +112,7 @@ export function volumeByGeometry(
     working,
   })
 }
+
+/** 88 for a share of 12: without the binary noise of the division, which the working would print. */
+const percentLeft = (displacedLitres: number, tankLitres: number): number =>
+  Number((100 - (displacedLitres / tankLitres) * 100).toPrecision(12))

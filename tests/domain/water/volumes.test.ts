@@ -109,6 +109,30 @@ describe('the volume worksheet', () => {
     expect(await verifyWorking(without.working)).toEqual({ ok: true })
   })
 
+  it('counts an error of the tanks on the water that a displaced share leaves in them', async () => {
+    const cube = {
+      method: 'geometry',
+      parts: [
+        {
+          key: 'tank',
+          role: 'tank',
+          shape: { shape: 'rectangular', length: q('1', 'm'), width: q('1', 'm'), depth: q('1', 'm') },
+          errorPercent: 10,
+        },
+      ],
+      pipes: [],
+      displacement: { by: 'share', share: q('12', 'percent'), errorPercent: 0 },
+    } as const
+    // 1,000 L ± 10 %, 88 % of it water: 880 ± 88 L, by hand
+    const share = determined(cube)
+    expect(share.netLitres).toBeCloseTo(880, 9)
+    expect(share.errorPercent).toBeCloseTo(10, 9)
+    expect(await verifyWorking(share.working)).toEqual({ ok: true })
+    // of a displaced volume that was measured by itself the error of the tank is all of it: 880 ± 100 L
+    const measured = { by: 'volume', volume: q('120', 'L'), errorPercent: 0 } as const
+    expect(determined({ ...cube, displacement: measured }).errorPercent).toBeCloseTo(100 / 8.8, 9)
+  })
+
   it('takes a meter, a dilution or a statement instead', async () => {
     const metered = determined({
       method: 'metered',
