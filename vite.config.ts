@@ -8,7 +8,7 @@ import react from '@vitejs/plugin-react'
 import tailwindcss from '@tailwindcss/vite'
 import { calculators } from './shared/bench/calculators.ts'
 import type { AnyCalculator } from './shared/bench/definition.ts'
-import { say } from './shared/bench/words.ts'
+import { say, wordOf } from './shared/bench/words.ts'
 
 const files = (...folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.{ts,tsx}`)
 // each file has its own database, browser and folders: the server need not be loaded anew for each of them
@@ -58,7 +58,11 @@ const benchInPieces: Plugin = {
       )
     }
     const entries = calculators.map((of) => {
-      const words = JSON.stringify({ name: say(of, 'name'), purpose: say(of, 'purpose') })
+      const words = JSON.stringify({
+        name: say(of, 'name'),
+        purpose: say(of, 'purpose'),
+        search: wordOf(of, 'search') ?? '',
+      })
       return `{ id: '${of.id}', group: '${of.group}', weekly: ${String(of.weekly ?? false)}, piece: '${pieceOf(of)}', words: defineMessages(${words}) }`
     })
     const messages = fileURLToPath(new URL('shared/messages/define-messages.ts', import.meta.url))

@@ -10,7 +10,7 @@ declare module 'virtual:bench' {
     weekly: boolean
     /** Which piece it is loaded with. */
     piece: string
-    words: { readonly name: string; readonly purpose: string }
+    words: { readonly name: string; readonly purpose: string; readonly search: string }
   }[]
 
   /** Loads the calculators of a piece. */

@@ -104,7 +104,8 @@ export interface Calculator<
   weekly?: true
   /**
    * name · purpose · input.<name> · help.<name> · option.<name>.<option> · result.<key> · line.<code> · column.<key> ·
-   * caution.<code> · refusal.<code> · formula · axis.<key of another word> where that one is too short on a curve
+   * caution.<code> · refusal.<code> · formula · search (other names that people look for) · axis.<key of another word> where
+   * that one is too short on a curve
    */
   words: Messages
   inputs: Inputs

@@ -16,6 +16,7 @@ export const ammoniaForms = defineCalculator({
   words: defineMessages({
     name: 'Ammonia as N, NH₃ or NH₄',
     purpose: 'Tests count the same ammonia as nitrogen, as NH₃ or as NH₄: from one count to another.',
+    search: 'TAN nitrogen NH3 NH4',
     formula: 'as NH₃ = as N × 17.031 ÷ 14.007; as NH₄ = as N × 18.039 ÷ 14.007',
     'input.reading': 'Reading',
     'input.of': 'What the test counts it as',

@@ -26,6 +26,7 @@ export const bathDose = defineCalculator({
   words: defineMessages({
     name: 'Bath dose',
     purpose: 'How much product to weigh or measure for a target concentration in standing water.',
+    search: 'formalin formaldehyde hydrogen peroxide praziquantel ppm',
     formula: 'amount = target × net volume ÷ (strength × share)',
     'input.target': 'Target in the water',
     'help.target': 'Parts per million say too little: choose mg/L or µL/L.',

@@ -25,6 +25,7 @@ export const dechlorination = defineCalculator({
   words: defineMessages({
     name: 'Dechlorination',
     purpose: 'Thiosulfate for tap water or a spent disinfectant, and the ammonia that chloramine leaves.',
+    search: 'chlorine chloramine tap',
     formula: 'mass = total chlorine × volume × ratio',
     'input.water': 'What has the chlorine in it',
     'option.water.spent-disinfectant': 'A disinfectant that is thrown away',

@@ -17,6 +17,7 @@ export const groupBiomassCalculator = defineCalculator({
   words: defineMessages({
     name: 'Mass of a group',
     purpose: 'What a group weighs by count and mean weight, and what feed has added since the weighing.',
+    search: 'biomass',
     formula: 'mass = count × mean weight + feed given ÷ feed conversion',
     'input.count': 'Number of animals',
     'input.countError': 'Error of the number',

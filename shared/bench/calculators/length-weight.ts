@@ -34,6 +34,7 @@ export const lengthWeight = defineCalculator({
   words: defineMessages({
     name: 'Length and weight',
     purpose: 'Weight from a length or back by the coefficients of a species, and how well fed an animal is.',
+    search: 'condition factor',
     formula: 'weight = a × length ^ b',
     'input.find': 'What to find',
     'option.find.weight': 'Weight from length',

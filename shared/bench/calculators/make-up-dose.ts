@@ -30,6 +30,7 @@ export const makeUpDose = defineCalculator({
     name: 'Make-up dose',
     purpose:
       'How much product brings a bath back to its target: for the water that was changed, by a test, or for a loss that is expected.',
+    search: 'top-up formalin ppm',
     formula: 'amount = (target − what is left) × net volume ÷ strength; of a change, target × water changed',
     'input.after': 'What is made up for',
     'option.after.change': 'Water that was changed',

@@ -34,6 +34,7 @@ export const medicatedFeed = defineCalculator({
     name: 'Medicated feed',
     purpose:
       'How strong a feed or a gel has to be, what to weigh into a batch, and what a group takes and has taken.',
+    search: 'premix gel oral',
     formula: 'strength = dose ÷ (feeding rate ÷ 100)',
     'input.find': 'What to find',
     'option.find.batch': 'What to weigh into a batch',

@@ -37,6 +37,7 @@ export const oxygenSaturation = defineCalculator({
     name: 'Oxygen saturation',
     purpose:
       'Percent of saturation from a reading, a reading from a percentage, or what the water holds at saturation.',
+    search: 'DO dissolved',
     formula: 'at saturation = fresh water at this temperature × salt factor × pressure factor',
     'input.find': 'What to find',
     'option.find.percent': 'Percent of saturation, from a reading',

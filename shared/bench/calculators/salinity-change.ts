@@ -33,6 +33,7 @@ export const salinityChange = defineCalculator({
     name: 'Change of salinity',
     purpose:
       'How much water to swap to reach another salinity: at once, in daily steps at a limit, or running through.',
+    search: 'hyposalinity dip freshwater',
     formula: 'litres = volume × (from − to) ÷ (from − replacement)',
     'input.way': 'How it is changed',
     'option.way.steps': 'In daily steps',

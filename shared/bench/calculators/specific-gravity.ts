@@ -22,6 +22,7 @@ export const specificGravity = defineCalculator({
     name: 'Specific gravity and salinity',
     purpose:
       'Salinity from a hydrometer or refractometer, or the specific gravity that a salinity should show.',
+    search: 'hydrometer refractometer',
     formula: 'SG = density of the water ÷ density of pure water at the reference temperature (EOS-80)',
     'input.find': 'What to find',
     'option.find.salinity': 'Salinity',

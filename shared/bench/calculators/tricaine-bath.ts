@@ -33,6 +33,7 @@ export const tricaineBath = defineCalculator({
     name: 'Tricaine bath',
     purpose:
       'Stock for an anaesthetic bath with its buffer, the strength that a mix has, or a bottle of stock.',
+    search: 'anaesthetic anesthesia sedation euthanasia',
     formula: 'stock = target × finished bath ÷ strength; on top of the water ÷ (strength − target)',
     'input.find': 'What to find',
     'option.find.stock': 'Stock for a bath',
@@ -90,6 +91,13 @@ export const tricaineBath = defineCalculator({
       'Choose what the veterinarian means the bath for. Doses for sedation, a procedure and euthanasia differ by ten times.',
     'caution.plane-sedation': 'The veterinarian means this bath for sedation, by what was chosen.',
     'caution.plane-surgery': 'The veterinarian means this bath for anaesthesia, by what was chosen.',
+    'caution.may-recover':
+      'This is within what the label gives for anaesthesia of fish, 15 to 330 mg/L: an animal may recover. Check the target.',
+    'caution.above-label':
+      'The label gives 15 to 330 mg/L for fish, and more only for amphibians. This can kill. Check the target and what the bath is for.',
+    'caution.deep-for-sedation':
+      'Sedation of fish is usually at 50 to 75 mg/L (from memory): this may go deeper. Check the target.',
+    'caution.below-label': 'The label begins at 15 mg/L for fish. Check the target and its unit.',
     'caution.plane-euthanasia':
       'By what was chosen this bath is meant to kill. Mark it, and keep it apart from every other. An animal that lies still may be alive: the veterinarian says how its death is confirmed.',
     'caution.finished-bath': 'The volume is that of the finished bath, with the stock in it.',
@@ -238,7 +246,8 @@ export const tricaineBath = defineCalculator({
     if (find === 'reached' && poured) {
       const reached = reachedBy(strength, poured, volume)
       if (!reached.ok) return reached
-      return ok({ ...reached.value, cautions: [...before, { code: 'recipes', level: 'note' }] })
+      const doubts = doubtsOf(plane, reached.value.figures[0].value)
+      return ok({ ...reached.value, cautions: [...doubts, ...before, { code: 'recipes', level: 'note' }] })
     }
     if (!target || !filling) return refuse('blank', 'target', { unit: 'mg/L' })
     const asked = { targetMgPerL: target.value, stockGPerL: strength.value / mgPerGram }
@@ -275,6 +284,7 @@ export const tricaineBath = defineCalculator({
         ...buffered.value.working,
       ],
       cautions: [
+        ...doubtsOf(plane, target.value),
         ...before,
         ...buffered.value.cautions,
         { code: onTop ? 'water-before' : 'finished-bath', level: 'note' },
@@ -315,6 +325,19 @@ function powderIn(
   if (!grams.ok) return grams
   const expression = `${enteredTerm(made)} * ${strengthTerm(strength)} to g`
   return ok({ grams: grams.value, working: [line('powder', expression, grams.value, 'g')] })
+}
+
+/** Of fish: the label's range, and what sedation usually takes. */
+const labelMgPerL = { least: 15, most: 330 }
+const mostSedationMgPerL = 75
+
+/** A strength that does not go with what the veterinarian means it for; the veterinarian's target decides. */
+function doubtsOf(plane: string | undefined, mgPerL: number): BenchCaution[] {
+  const warning = (code: string): BenchCaution[] => [{ code, level: 'warning' }]
+  if (plane === 'euthanasia') return mgPerL <= labelMgPerL.most ? warning('may-recover') : []
+  if (mgPerL > labelMgPerL.most) return warning('above-label')
+  if (plane === 'sedation' && mgPerL > mostSedationMgPerL) return warning('deep-for-sedation')
+  return mgPerL < labelMgPerL.least ? warning('below-label') : []
 }
 
 function reachedBy(

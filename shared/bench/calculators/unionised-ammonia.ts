@@ -22,6 +22,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
   words: defineMessages({
     name: 'Un-ionised ammonia',
     purpose: 'The poisonous share of the ammonia that a test found, from pH, temperature and salinity.',
+    search: 'TAN nitrogen toxic NH3',
     formula: 'share = 1 ÷ (1 + 10^(pK − pH)); NH₃-N = share × total ammonia as N',
     'input.total': 'Total ammonia by a test',
     'input.totalOf': 'What the test counts it as',

@@ -21,6 +21,7 @@ export const unitConversion = defineCalculator({
   words: defineMessages({
     name: 'Unit conversion',
     purpose: 'A quantity in another unit of the same kind, by exact definitions.',
+    search: 'ppm gallons fahrenheit celsius pounds inches hardness alkalinity',
     formula: 'both units by their exact factors to the unit of their kind',
     'input.from': 'Quantity',
     'help.from': 'Choose US or imperial gallons; parts per million are no unit.',

@@ -18,6 +18,7 @@ export const washOut = defineCalculator({
     name: 'Wash-out by flow',
     purpose:
       'How long a flow of clean water takes to wash a share of something out, or what is left after a time.',
+    search: 'flush',
     formula: 'time = −(volume ÷ flow) × ln(share left)',
     'input.find': 'What to find',
     'option.find.time': 'The time it takes',

@@ -5,12 +5,13 @@ import { benchSheetWords as words } from '../../../shared/messages/bench-sheet.t
 import { paths } from '../../lib/paths.ts'
 import { listedCalculators, type ListedCalculator } from './load-calculator.ts'
 
-/** Calculators whose name or purpose has every one of the words. */
+/** Calculators whose name, purpose or other names have words that begin as each of those typed. */
 export function matchingCalculators(q: string): ListedCalculator[] {
   const wanted = q.toLowerCase().split(/\s+/).filter(Boolean)
   return listedCalculators.filter((of) => {
-    const text = `${of.words.name} ${of.words.purpose}`.toLowerCase()
-    return wanted.every((word) => text.includes(word))
+    const text = `${of.words.name} ${of.words.purpose} ${of.words.search}`.toLowerCase()
+    const starts = text.split(/[^\p{L}\p{N}-]+/u)
+    return wanted.every((word) => starts.some((each) => each.startsWith(word)))
   })
 }
 

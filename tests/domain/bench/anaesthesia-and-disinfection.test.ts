@@ -114,6 +114,30 @@ describe('a tricaine bath', () => {
   })
 })
 
+describe('a strength of tricaine against what it is meant for', () => {
+  const bath = {
+    ...{ find: 'stock', filling: 'filled-up', volume: '10 L', strength: '10 g/L', bottle: 'dated' },
+    ...{ buffer: 'now', ratio: '2 ratio' },
+  }
+  // 21 CFR 529.2503: fish 15 to 330 mg/L; sedation 50 to 75 mg/L is from memory
+  it.each([
+    ['sedation', '500 mg/L', 'above-label'],
+    ['sedation', '100 mg/L', 'deep-for-sedation'],
+    ['sedation', '75 mg/L', undefined],
+    ['surgery', '100 mg/L', undefined],
+    ['surgery', '331 mg/L', 'above-label'],
+    ['surgery', '10 mg/L', 'below-label'],
+    ['euthanasia', '100 mg/L', 'may-recover'],
+    ['euthanasia', '500 mg/L', undefined],
+  ])('%s at %s: %s', async (plane, target, code) => {
+    const doubts = ['above-label', 'deep-for-sedation', 'below-label', 'may-recover']
+    const { cautions } = await ask('tricaine-bath', { ...bath, plane, target })
+    const found = cautions.filter((one) => doubts.includes(one.code))
+    expect(found.map((one) => one.code)).toEqual(code === undefined ? [] : [code])
+    for (const { level } of found) expect(level).toBe('warning')
+  })
+})
+
 describe('dechlorination', () => {
   it('gives its range in the unit of the result, also where grams become kilograms', async () => {
     // 200 mg/L × 700 L × 7.4 = 1,036 g, ± 5 % of the volume: 0.984…1.088 kg (by hand)
