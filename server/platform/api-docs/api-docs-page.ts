@@ -7,6 +7,7 @@ import { roles } from '../../../shared/domain/permissions/roles.ts'
 import { apiDocsWords as words } from '../../../shared/messages/api-docs.ts'
 import { roleNames } from '../../../shared/messages/permissions.ts'
 import { problemTitles } from '../../../shared/messages/problems.ts'
+import { mediaTypes, refusalsOf } from '../http/replies-of.ts'
 import { listFields, type FieldLine } from './list-fields.ts'
 
 const escape = (text: string): string =>
@@ -44,14 +45,6 @@ function fieldTable(lines: readonly FieldLine[], caption: string): string {
   return `<div class="wide"><table><caption>${escape(caption)}</caption><thead><tr>${head.join('')}</tr></thead><tbody>${rows.join('')}</tbody></table></div>`
 }
 
-const media = {
-  json: 'application/json',
-  csv: 'text/csv',
-  pdf: 'application/pdf',
-  html: 'text/html',
-  stream: 'application/octet-stream',
-} as const
-
 const retryWords = {
   'by-key': words.byKey,
   'by-record-id': words.byRecord,
@@ -59,9 +52,7 @@ const retryWords = {
 } as const
 
 function problemList(of: Contract): string {
-  const always = of.action === 'public' ? [] : (['not-signed-in', 'may-not'] as const)
-  const parsing = of.params || of.query || of.body ? (['bad-input'] as const) : []
-  const codes = [...new Set([...always, ...parsing, ...of.problems])]
+  const codes = refusalsOf(of)
   if (codes.length === 0) return ''
   const items = codes.map(
     (each) => `<li>${String(problemStatus[each])} ${code(each)} ${escape(problemTitles[each])}</li>`,
@@ -75,7 +66,7 @@ function operation(of: Contract): string {
   const reply = Object.values(of.reply)[0]
   const body = of.body && jsonOf(of.body, 'input')
   const place = [of.params, of.query].flatMap((each) => (each ? listFields(jsonOf(each, 'input')) : []))
-  const said = words.reply({ status: String(successStatus(of)), media: media[of.produces ?? 'json'] })
+  const said = words.reply({ status: String(successStatus(of)), media: mediaTypes[of.produces ?? 'json'] })
   return [
     `<details id="${escape(of.id)}"><summary><code>${escape(address)}</code> <span>${escape(of.summary)}</span></summary>`,
     `<p><b>${escape(words.who)}</b> ${escape(whoMay(of))}</p>`,

@@ -4,6 +4,7 @@ import type { Contract } from '../../../shared/contracts/contract.ts'
 import { allContracts } from '../../../shared/contracts/index.ts'
 import { personHeader } from '../../../shared/contracts/person-header.ts'
 import { ProblemBody, problemStatus } from '../../../shared/contracts/problems.ts'
+import { mediaTypes, refusalsOf } from './replies-of.ts'
 
 type Schema = Record<string, unknown>
 
@@ -27,19 +28,9 @@ function parametersOf(schema: z.ZodType | undefined, place: 'path' | 'query'): S
   )
 }
 
-const mediaTypes = {
-  json: 'application/json',
-  csv: 'text/csv',
-  pdf: 'application/pdf',
-  html: 'text/html',
-  stream: 'application/octet-stream',
-} as const
-
 function problemsOf(of: Contract): Schema {
-  const always = of.action === 'public' ? [] : (['not-signed-in', 'may-not'] as const)
-  const parsing = of.params || of.query || of.body ? (['bad-input'] as const) : []
   const byStatus = new Map<number, string[]>()
-  for (const code of [...always, ...parsing, ...of.problems]) {
+  for (const code of refusalsOf(of)) {
     const status = problemStatus[code]
     byStatus.set(status, [...(byStatus.get(status) ?? []), code])
   }

@@ -17,7 +17,6 @@ import {
   scaleCautions,
   temperature68Line,
 } from './parts/practical-salinity-lines.ts'
-import { refuseSpecificGravity, specificGravityWords } from './parts/specific-gravity-trap.ts'
 
 /** The temperature that compensating meters mostly show the conductivity of, °C. */
 const usualReferenceC = 25
@@ -28,7 +27,6 @@ export const conductivityFromSalinity = defineCalculator({
   group: 'water',
   words: defineMessages({
     ...practicalSalinityWords,
-    ...specificGravityWords,
     name: 'Conductivity from salinity',
     purpose: 'What a conductivity meter ought to show in sea water of a known salinity.',
     formula: 'conductivity = 42.914 mS/cm × the ratio that has this salinity on the scale of 1978',
@@ -67,8 +65,6 @@ export const conductivityFromSalinity = defineCalculator({
   plot: { vary: 'temperature', unit: 'degC', from: 0, to: 35, figure: 'conductivity' },
   published: ['conductivity_ratio_from_salinity'],
   compute({ salinity, temperature }) {
-    const gravity = refuseSpecificGravity(salinity)
-    if (!gravity.ok) return gravity
     const salinityPss78 = salinity.value
     const here = conductivityOf({ salinityPss78, temperatureC: temperature.value })
     if (!here.ok) return here

@@ -43,8 +43,6 @@ export const dripAcclimation = defineCalculator({
     'column.minutes': 'Minutes',
     'column.litres': 'Litres dripped in',
     'column.salinity': 'Salinity',
-    'refusal.specific-gravity-as-salinity':
-      'This looks like a specific gravity. A salinity of sea water is about 35; one near 1 is typed to a tenth.',
     'caution.ammonia':
       'Opened shipping water loses carbon dioxide, its pH rises and its ammonia turns poisonous. Test it, and do not drip for long into water that holds ammonia (from memory).',
     'caution.holds':

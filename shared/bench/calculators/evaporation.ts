@@ -30,8 +30,6 @@ export const evaporation = defineCalculator({
     'line.restored': 'Volume after it',
     'refusal.salinity-not-risen':
       'The salinity has not risen: nothing is to be topped up with fresh water. Check both figures.',
-    'refusal.specific-gravity-as-salinity':
-      'This looks like a specific gravity. A salinity of sea water is about 35; one near 1 is typed to a tenth.',
     'caution.otherwise':
       'Only evaporation is put back with fresh water. Where water was lost or salt was added, the salinity says nothing about the level.',
     'caution.chlorine': 'Take chlorine and chloramine out of tap water first, and match the temperature.',

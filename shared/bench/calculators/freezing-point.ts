@@ -10,7 +10,6 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution } from '../definition.ts'
 import { quantity } from '../inputs.ts'
 import { line } from '../line.ts'
-import { refuseSpecificGravity, specificGravityWords } from './parts/specific-gravity-trap.ts'
 
 /** Nearer than this to freezing a chiller has no reserve, °C. @source project-default */
 const leastReserveC = 1
@@ -22,7 +21,6 @@ export const freezingPoint = defineCalculator({
   id: 'freezing-point',
   group: 'water',
   words: defineMessages({
-    ...specificGravityWords,
     name: 'Freezing point of sea water',
     purpose: 'When sea water freezes, and how far the coldest spot of a chilled system is from it.',
     formula: 'freezing point = (−0.0575 + 0.001710523 × salinity^0.5 − 0.0002154996 × salinity) × salinity',
@@ -53,8 +51,6 @@ export const freezingPoint = defineCalculator({
   plot: { vary: 'salinity', unit: 'PSS-78', from: 4, to: 40, figure: 'freezing' },
   published: ['seawater_freezing_point'],
   compute({ salinity, coldest }) {
-    const gravity = refuseSpecificGravity(salinity)
-    if (!gravity.ok) return gravity
     const water = { salinityPss78: salinity.value, gaugePressureKPa: 0 }
     const freezing = freezingOf(water)
     if (!freezing.ok) return freezing

@@ -20,7 +20,6 @@ import {
   type AirAtTank,
 } from './parts/air-pressure.ts'
 import { oxygenLineWords, saturationLines, secondEquationLines } from './parts/oxygen-lines.ts'
-import { refuseSpecificGravity, specificGravityWords } from './parts/specific-gravity-trap.ts'
 
 /** The equations are good to about a thousandth, as are the tables made of them. */
 const digits = 3
@@ -33,7 +32,6 @@ export const oxygenSaturation = defineCalculator({
   words: defineMessages({
     ...airPressureWords,
     ...oxygenLineWords,
-    ...specificGravityWords,
     name: 'Oxygen saturation',
     purpose:
       'Percent of saturation from a reading, a reading from a percentage, or what the water holds at saturation.',
@@ -134,8 +132,6 @@ export const oxygenSaturation = defineCalculator({
   published: ['oxygen_solubility', 'oxygen_percent_saturation', 'oxygen_mg_per_L_from_percent'],
   compute(given) {
     const { find, temperature, salinity, oxygen, percent } = given
-    const gravity = refuseSpecificGravity(salinity)
-    if (!gravity.ok) return gravity
     const air = airAtTank(given)
     if (!air.ok) return air
     const water = { temperatureC: temperature.value, salinityPss78: salinity.value }

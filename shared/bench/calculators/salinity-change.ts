@@ -12,7 +12,6 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
-import { specificGravityWords } from './parts/specific-gravity-trap.ts'
 import { volumeUnits } from './parts/volume-input.ts'
 
 const salinity = (more: object = {}) =>
@@ -62,7 +61,6 @@ export const salinityChange = defineCalculator({
     'line.day': (p: { day: string }) => `Day ${p.day}`,
     'line.sum': 'Water to swap in all',
     'line.through': 'Water to run through',
-    ...specificGravityWords,
     'refusal.target-beyond-replacement':
       'A swap goes no further than the salinity of the replacement water, and a flow does not quite reach it. Check the three salinities, or take other water.',
     'refusal.target-behind-start':

@@ -64,8 +64,6 @@ export const saltMass = defineCalculator({
     'line.day': (p: { day: string }) => `Day ${p.day}`,
     'refusal.target-not-above-start':
       'Salt only raises a salinity. To lower it, swap water: see the change of salinity.',
-    'refusal.specific-gravity-as-salinity':
-      'This looks like a specific gravity. A salinity of sea water is about 35; one near 1 is typed to a tenth.',
     'caution.at-once': (p: { usual: string }) =>
       `All of it at once is a rise of more than ${p.usual}. With animals in the water a rise of 1 to 3 a day is common practice (no source), unless the order is for a bath or a dip.`,
     'caution.faster-than-usual': (p: { usual: string }) =>

@@ -17,7 +17,6 @@ import { quantity } from '../inputs.ts'
 import { line } from '../line.ts'
 import { temperature68Line } from './parts/practical-salinity-lines.ts'
 import { perHalfExpression, perSalinityExpression, pureExpression } from './parts/seawater-density-lines.ts'
-import { refuseSpecificGravity, specificGravityWords } from './parts/specific-gravity-trap.ts'
 import { volumeUnits } from './parts/volume-input.ts'
 
 /** The equations of 1980 and 2010 agree to a hundredth of a kilogram in a cubic metre. */
@@ -28,7 +27,6 @@ export const seawaterDensity = defineCalculator({
   id: 'seawater-density',
   group: 'water',
   words: defineMessages({
-    ...specificGravityWords,
     name: 'Density of sea water',
     purpose:
       'What sea water weighs, what the water of a tank weighs, and the salt in it by mass and by volume.',
@@ -88,8 +86,6 @@ export const seawaterDensity = defineCalculator({
   plot: { vary: 'salinity', unit: 'PSS-78', from: 0, to: 42, figure: 'density' },
   published: ['seawater_density_1atm', 'reference_salinity_from_practical'],
   compute({ salinity, temperature, volume }) {
-    const gravity = refuseSpecificGravity(salinity)
-    if (!gravity.ok) return gravity
     const water = { salinityPss78: salinity.value, temperatureC: temperature.value }
     const density = densityOf(water)
     if (!density.ok) return density

@@ -11,7 +11,6 @@ import { defineCalculator, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
 import { densityLines, densityLineWords, pureExpression } from './parts/seawater-density-lines.ts'
-import { specificGravityWords } from './parts/specific-gravity-trap.ts'
 
 /** Salinity from a hydrometer or refractometer, and the specific gravity that a salinity has. */
 export const specificGravity = defineCalculator({
@@ -49,7 +48,6 @@ export const specificGravity = defineCalculator({
       'Type the reference temperature of the instrument. 1.025 is a salinity of 33.2 on a 25/25 °C scale, 32.9 on 20/20 °C, 32.6 on 60/60 °F (15.56 °C), and 37.2 at 25 °C against water of 4 °C.',
     'refusal.salinity-as-specific-gravity':
       'This looks like a salinity. A specific gravity is written like 1.025.',
-    ...specificGravityWords,
     'refusal.lighter-than-fresh-water':
       'This is lighter than fresh water at that temperature. Check both temperatures.',
     'refusal.salinity-above-scale': 'This would be a salinity above 42, where the scale ends.',
