@@ -1,4 +1,5 @@
 import type { SourceKey, SourceMark } from '../sources.ts'
+import type { OrderRoute } from '../orders/order-route.ts'
 import type { FacilityDate } from '../time/instant.ts'
 import type { UnitCode } from '../units/unit-table.ts'
 import type { CautionCode, CautionParams, ResolveCode } from './caution-code.ts'
@@ -167,6 +168,8 @@ export interface CautionRule {
   levels: readonly CautionLevel[]
   when: CautionStage | 'both'
   overridable: boolean
+  /** The routes it is asked for; only immersion where it does not say. */
+  routes?: readonly OrderRoute[]
   parameters: Readonly<Record<string, RuleParameter>>
   /** The facts it looks at; a test holds it to them. */
   uses: readonly FactPath[]

@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -7,6 +8,7 @@ export const basis = defineRule({
   levels: ['stop'],
   when: 'design',
   overridable: false,
+  routes: orderRoutes,
   parameters: {},
   uses: ['order.target'],
   sources: [{ source: 'dose-arithmetic', mark: 'C' }],

@@ -1,4 +1,5 @@
 import { facilityDateOf } from '../../time/facility-date.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 
 /** No dose from a lot that has expired, was recalled or quarantined, or from a stock past its beyond-use date. */
@@ -7,6 +8,7 @@ export const lot = defineRule({
   levels: ['stop'],
   when: 'start',
   overridable: true,
+  routes: orderRoutes,
   parameters: {},
   uses: ['lot.expiresOn', 'lot.beyondUseOn', 'lot.status'],
   sources: [{ source: 'treatment-practice', mark: 'M' }],

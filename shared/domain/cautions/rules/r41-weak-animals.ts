@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 
@@ -7,6 +8,7 @@ export const weakAnimals = defineRule({
   levels: ['warning'],
   when: 'start',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     unwellPercent: { default: 5, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
   },

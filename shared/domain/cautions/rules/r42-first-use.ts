@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -7,6 +8,7 @@ export const firstUse = defineRule({
   levels: ['warning'],
   when: 'design',
   overridable: true,
+  routes: orderRoutes,
   parameters: {},
   uses: ['animals.withoutExperience'],
   sources: [

@@ -1,5 +1,6 @@
 import { addHours, compareInstants, hoursBetween } from '../../time/instant-arithmetic.ts'
 import { doseWindow } from '../../schedule/dose-window.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
@@ -15,6 +16,7 @@ export const plannedTime = defineRule({
   levels: ['note', 'warning'],
   when: 'design',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     aheadDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
     planDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
