@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
 import { cautionRules } from '../../../shared/domain/cautions/caution-rules.ts'
 import { evaluateCautions, routesOf } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { known, notApplicable } from '../../../shared/domain/cautions/fact.ts'
@@ -15,21 +16,21 @@ const line = {
   stays: false,
 } as const
 
-const injected = (value: number) => {
+const injected = (value: number): CautionFacts => {
   const facts = someFacts('enrofloxacin', { value, unit: 'mg/kg', basis: 'base' })
   return {
     ...facts,
-    route: 'injection' as const,
+    route: 'injection',
     order: { ...facts.order, defaultRange: known(line), agentRanges: known([line]) },
     volume: { determination: notApplicable() },
-    lifeSupport: { ...facts.lifeSupport, carbon: known('on' as const), ozone: known('on' as const) },
+    lifeSupport: { ...facts.lifeSupport, carbon: known('on'), ozone: known('on') },
   }
 }
 
 describe('the route of a treatment', () => {
   it('asks rules of the water of an immersion alone', () => {
-    const bath = { ...injected(10), route: 'immersion' as const, agent: 'praziquantel' as const }
-    const ids = (facts: typeof bath | ReturnType<typeof injected>) =>
+    const bath: CautionFacts = { ...injected(10), route: 'immersion', agent: 'praziquantel' }
+    const ids = (facts: CautionFacts) =>
       evaluateCautions({ facts, stage: 'start' }).cautions.map(({ ruleId }) => ruleId)
     expect(ids(bath)).toContain('R14')
     expect(ids(injected(10))).not.toContain('R14')
