@@ -66,7 +66,8 @@ function findCause(facts: CautionFacts, limits: Limits): SecondCalculationCause 
   const millilitres = valueOf(facts.order.amountMillilitres)
   if (grams !== null && exceeds(grams, limits.amountGrams)) return 'amount'
   if (millilitres !== null && exceeds(millilitres, limits.amountMillilitres)) return 'amount'
-  const isVolumeMissing = facts.route === 'immersion' && litres === null
+  const { state } = facts.volume.determination
+  const isVolumeMissing = litres === null && (facts.route === 'immersion' || state === 'unknown')
   return isVolumeMissing || (grams === null && millilitres === null) ? 'not-known' : null
 }
 
