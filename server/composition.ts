@@ -102,6 +102,7 @@ export function compose(outside: Outside) {
     water,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
   })
   const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
@@ -112,6 +113,7 @@ export function compose(outside: Outside) {
     orders,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
   })
   const handover = createHandover(parts)
   const bench = createBench({ ...parts, facility: facility.service })

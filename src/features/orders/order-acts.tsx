@@ -1,7 +1,7 @@
 import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
-import { PenLine, Play, Printer } from 'lucide-react'
+import { PenLine, Play, Printer, Tag } from 'lucide-react'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { useMay } from '../../lib/may.ts'
@@ -18,7 +18,7 @@ import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useDiscontinue, useLiftHold } from './mutations.ts'
-import { printAddress } from './queries.ts'
+import { labelAddress, printAddress } from './queries.ts'
 
 const over = new Set<Order['phase']>(['completed', 'expired', 'discontinued'])
 
@@ -42,6 +42,19 @@ export function OrderActs({ order, version }: { order: Order; version: number })
       ) : (
         <Button icon={Printer} shut={print.why ?? ''}>
           {words.print}
+        </Button>
+      )}
+      {print.allowed && order.record === 'intact' ? (
+        <a
+          className={buttonClass({})}
+          href={labelAddress(order.number)}
+          download={`${order.number}-label.pdf`}
+        >
+          <ButtonFace icon={Tag}>{words.printLabel}</ButtonFace>
+        </a>
+      ) : (
+        <Button icon={Tag} shut={print.why ?? words.labelNotIntact}>
+          {words.printLabel}
         </Button>
       )}
       {amend.allowed && !ended && order.draft === null ? (
