@@ -105,6 +105,7 @@ export function compose(outside: Outside) {
     water,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
   })
   const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
@@ -115,6 +116,7 @@ export function compose(outside: Outside) {
     orders,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
   })
   const handover = createHandover(parts)
   const bench = createBench({ ...parts, facility: facility.service })
