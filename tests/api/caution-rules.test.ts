@@ -64,6 +64,20 @@ async function confirm(
     .send({ password, reason: 'checked against the log of the meters', ...given })
 }
 
+/** A signed bath of half an hour, in water that was read at so much oxygen a few minutes ago. */
+async function aBathAt(oxygenMgPerL: string): Promise<string> {
+  const bath = await house.tankWithSchool()
+  const number = await house.signedBath(bath, { contactMinutes: 30 })
+  await house.freshWater(bath)
+  await readingsNow(
+    api,
+    bath.tank.waterBodyId,
+    { 'dissolved-oxygen': [oxygenMgPerL, 'mg/L'] },
+    '2026-12-01T18:12:00Z',
+  )
+  return number
+}
+
 describe('the list of rules', () => {
   it('holds every rule with its words, findings, sources and thresholds, for every role that is signed in', async () => {
     for (const role of roles) {
@@ -268,15 +282,7 @@ describe('cautions by the thresholds of the facility', () => {
   })
 
   it('a loosened one shows on every caution that it touches, and names who confirmed it', async () => {
-    const bath = await house.tankWithSchool()
-    const number = await house.signedBath(bath, { contactMinutes: 30 })
-    await house.freshWater(bath)
-    await readingsNow(
-      api,
-      bath.tank.waterBodyId,
-      { 'dissolved-oxygen': ['4.2', 'mg/L'] },
-      '2026-12-01T18:12:00Z',
-    )
+    const number = await aBathAt('4.2')
     const fired = async () => (await cautionsAtDose(number)).find(({ ruleId }) => ruleId === 'R01')
     const strict = await fired()
     expect(strict).toMatchObject({ code: 'oxygen-low' })
@@ -295,15 +301,7 @@ describe('cautions by the thresholds of the facility', () => {
   })
 
   it('a dose recorded late is judged by those of its own time', async () => {
-    const bath = await house.tankWithSchool()
-    const number = await house.signedBath(bath, { contactMinutes: 30 })
-    await house.freshWater(bath)
-    await readingsNow(
-      api,
-      bath.tank.waterBodyId,
-      { 'dissolved-oxygen': ['5.4', 'mg/L'] },
-      '2026-12-01T18:12:00Z',
-    )
+    const number = await aBathAt('5.4')
     api.clock.set(new Date('2026-12-01T18:40:00Z'))
     expect((await propose('R01', 'oxygenFloorMgPerL', { value: '6' })).status).toBe(201)
     expect((await confirm('R01', 'oxygenFloorMgPerL')).status).toBe(200)

@@ -3,8 +3,7 @@ import type {
   ListedParameter,
   ParameterVersion,
 } from '../../../shared/contracts/caution-rules.contract.ts'
-import type { RuleParameterKey } from '../../../shared/domain/cautions/caution-rule.ts'
-import type { CautionSettings } from '../../../shared/domain/cautions/caution-rule.ts'
+import type { CautionSettings, RuleParameterKey } from '../../../shared/domain/cautions/caution-rule.ts'
 import { isLegal, loosens, parameterLimits } from '../../../shared/domain/cautions/check-parameter.ts'
 import { listCautionRules } from '../../../shared/domain/cautions/list-caution-rules.ts'
 import type { ListedCautionRule } from '../../../shared/domain/cautions/list-caution-rules.ts'
