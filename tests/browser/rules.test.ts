@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { cautionRules } from '../../shared/domain/cautions/caution-rules.ts'
 import { password } from '../support/api.ts'
 import { launchChromium } from '../support/chromium.ts'
+import { textOf } from '../pdf/support/poppler.ts'
 import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
@@ -170,7 +171,15 @@ describe('the rules where they are looked for', () => {
     expect(await page.getByRole('button', { name: 'Open every rule' }).isVisible()).toBe(false)
     expect(await page.locator('.bridge').isVisible()).toBe(false)
     await picture(page, 'rules-printed')
-    const paper = await page.pdf({ format: 'A4' })
-    expect(paper.byteLength).toBeGreaterThan(50_000)
+    // whichever way the paper lies: the frame of a wide window scrolls, and paper does not
+    for (const landscape of [false, true]) {
+      const paper = await page.pdf({ format: 'A3', landscape })
+      const text = textOf(paper)
+      for (const { id } of cautionRules) expect(text).toContain(`${id} `)
+      expect(text.replaceAll('\u00a0', ' ')).toContain(
+        'Doses that stay in the water make a strength together',
+      )
+      expect(text).not.toContain('Filters')
+    }
   })
 })

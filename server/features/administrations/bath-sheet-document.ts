@@ -117,7 +117,7 @@ function conditionsBlock({ sheet }: BathPaper): DocumentBlock {
     kind: 'conditions',
     columns: 2,
     items: sheet.steps.map((step) => [
-      { text: step.text },
+      { text: [step.text, ...step.changed].join('. ') },
       {
         text: `${states[step.state]}${step.overridden ? bathPaper.overridden : ''}`,
         bold: step.state !== 'met',
