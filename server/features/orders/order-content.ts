@@ -54,6 +54,8 @@ export interface SignedOrder {
   conditions: ReturnType<typeof saidCondition>[]
   overrides: (SignedAnswer & { reason: string })[]
   read: (string | SignedAnswer)[]
+  /** As it was read by the signer; absent in orders signed before it was asked for, null where the use is by the label. */
+  relationship?: string | null
   facts: Json
 }
 
@@ -67,6 +69,7 @@ export interface ContentRequest {
   volume: NonNullable<WaterFacts['volume']>
   overrides: Override[]
   read: AnsweredCaution[]
+  relationship: string | null
 }
 
 /** Puts the content of a signature together. */
@@ -117,6 +120,7 @@ export function contentOf(request: ContentRequest): SignedOrder {
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,
     read: request.read,
+    relationship: request.relationship,
     facts: JSON.parse(JSON.stringify(judgement?.facts ?? null)) as Json,
   }
 }
