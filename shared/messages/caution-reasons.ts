@@ -21,6 +21,7 @@ export const cautionReasonWords = defineMessages({
   R15: 'Ozone and ultraviolet light break drugs down, and oxidants add up.',
   R16: 'A foam fractionator carries the drug out and may overflow.',
   R17: 'Chloroquine is poisonous to algae and some invertebrates, and light breaks it down.',
+  R18: 'Tricaine is a strong acid: without a buffer the pH falls far, in sea water too, and the animals are burnt by it.',
   R22: 'The label of hydrogen peroxide excludes some species and stages; warm water makes it harsher.',
   R23: 'Chloramine-T is more poisonous in acid and soft water.',
   R24: 'In alkaline and hard water permanganate leaves its oxide on the gills, and what is given in a day adds up.',

@@ -74,6 +74,7 @@ export const orderFormWords = defineMessages({
   oxygenIsLogged: 'Oxygen is logged continuously',
   hasBloom: 'Heavy bloom of algae',
   hasPlantsOrAlgae: 'Plants or algae on show',
+  isBuffered: 'Buffered with bicarbonate',
   lights: 'Lights over the water',
   full: 'Full',
   dimmed: 'Dimmed',

@@ -90,6 +90,12 @@ export interface CautionParams {
   'chloroquine-algae-unknown': Record<never, never>
   'chloroquine-lights': Record<never, never>
   'chloroquine-lights-unknown': Record<never, never>
+  'tricaine-unbuffered': Record<never, never>
+  'tricaine-buffer-unknown': Record<never, never>
+  'tricaine-acid': { reading: CautionQuantity; limit: CautionQuantity }
+  'tricaine-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
+  'tricaine-ph-differs': { reading: CautionQuantity; home: CautionQuantity; limit: CautionQuantity }
+  'tricaine-home-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
   'peroxide-excluded': { animals: readonly NamedAnimal[] }
   'peroxide-walleye': { animals: readonly NamedAnimal[] }
   'peroxide-eggs': { animals: readonly NamedAnimal[]; from: number; to: number }
@@ -220,6 +226,8 @@ export type ResolveCode =
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'
+  | 'buffer-the-bath'
+  | 'say-whether-buffered'
   | 'test-some-first'
   | 'declare-experience'
   | 'check-figure'

@@ -119,6 +119,7 @@ export function orderFacts(
       dosesStillIn: known(draft.given.stillIn, null, 'the order'),
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
+      isBuffered: orUnknown(said.isBuffered ?? null, stated),
       spacing:
         draft.intervalHours === null && draft.given.doses === 0
           ? notApplicable()
