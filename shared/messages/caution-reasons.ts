@@ -25,6 +25,7 @@ export const cautionReasonWords = defineMessages({
   R22: 'The label of hydrogen peroxide excludes some species and stages; warm water makes it harsher.',
   R23: 'Chloramine-T is more poisonous in acid and soft water.',
   R24: 'In alkaline and hard water permanganate leaves its oxide on the gills, and what is given in a day adds up.',
+  R25: 'Methylene blue stops the bacteria that turn ammonia into nitrate.',
   R26: 'A slip of the decimal point or of the unit shows as a figure far from the range that is used.',
   R27: 'Product, salt, base and free forms differ by factors of two to four: a bare figure is not a dose.',
   R28: 'Doses given too early add up in the animal; those given too late leave gaps.',

@@ -7,7 +7,7 @@ export type CautionTexts = { [Code in CautionCode]: (params: Said<CautionParams[
 
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
 
-/** Titles of the rules on anaesthesia. */
+/** Titles of the rules on anaesthesia and on the biofilter. */
 export const moreCautionTitles = {
   'tricaine-unbuffered': 'Tricaine without a buffer',
   'tricaine-buffer-unknown': 'Nobody said whether the tricaine is buffered',
@@ -15,6 +15,8 @@ export const moreCautionTitles = {
   'tricaine-ph-unknown': 'The pH of the bath is not known',
   'tricaine-ph-differs': 'The bath is not of the pH of the home water',
   'tricaine-home-ph-unknown': 'The pH of the home water is not known',
+  'biofilter-on': 'Methylene blue with a biofilter on the water',
+  'biofilter-unknown': 'Whether a biofilter is on the water is not known',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -30,4 +32,8 @@ export const moreCautionTexts = {
     `The bath reads ${p.reading}, the water that the animals come from ${p.home}: more than ${p.limit} apart.`,
   'tricaine-home-ph-unknown': (p) =>
     `The water that the animals come from was not measured within ${hours(p.maxAgeHours)} on the same scale. The bath may differ from it by ${p.limit} at most.`,
+  'biofilter-on': () =>
+    'A biofilter runs on the connected water. Methylene blue stops it, and ammonia and nitrite rise.',
+  'biofilter-unknown': () =>
+    'The life support of this water has no biofilter that was recorded as on or off, and the order does not say whether there is one. Methylene blue stops it.',
 } satisfies Partial<CautionTexts>

@@ -44,6 +44,7 @@ export const cautionRuleWords = defineMessages({
   R22: 'Hydrogen peroxide: species, eggs and temperature',
   R23: 'Chloramine-T: acid and soft water',
   R24: 'Potassium permanganate: water, total of a day and repeats',
+  R25: 'Methylene blue: no biofilter on the water',
   R26: 'The figure lies within the range of its dose line, or of the highest line for this water and contact where the order names none',
   R27: 'The figure says of what it is',
   R28: 'The dose lies within its window and the planned number',
@@ -127,6 +128,9 @@ export const resolveWords = defineMessages({
   'ozone-off': 'Turn ozone off, and record it.',
   'uv-off': 'Turn the ultraviolet lamp off, and record it.',
   'fractionator-off': 'Turn the foam fractionator off, and record it.',
+  'biofilter-off': 'Part the biofilter from the water, or turn it off, and record it.',
+  'say-whether-biofilter':
+    'Say on the order whether a biofilter is on this water, or record it at the life support.',
   'dim-lights': 'Dim the lights, and record it.',
   'read-water': 'Test the water now.',
   'correct-water': 'Correct the water first.',

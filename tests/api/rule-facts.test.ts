@@ -141,3 +141,38 @@ describe('a tricaine bath in a tub', () => {
     expect(await atDose('R18', number)).toEqual([])
   })
 })
+
+describe('methylene blue', () => {
+  it('asks the life support for a biofilter, and the order where it lists none', async () => {
+    const tank = await aBathWater(api, 'QT-MB')
+    const school = await aSchool(api, tank.id, 3)
+    const blue = await aProduct(api, {
+      agent: 'methylene-blue',
+      productName: 'Methylene blue',
+      strengthBasis: 'product',
+    })
+    const fields = bathFields({
+      enclosureId: tank.id,
+      animalIds: [school.id],
+      productId: blue.id,
+      lotId: blue.lotId,
+      basis: 'product',
+    })
+    const said = (hasBiofilter: boolean) => written('R25', { ...fields, stated: stated({ hasBiofilter }) })
+    expect(await written('R25', fields)).toEqual(['stop biofilter-unknown'])
+    expect(await said(true)).toEqual(['stop biofilter-on'])
+    expect(await said(false)).toEqual([])
+    const unit = {
+      id: api.nextId(),
+      code: 'BIO-MB',
+      name: 'Biofilter',
+      kind: 'biofilter',
+      waterBodyId: tank.sumpId,
+      inUseFrom: '2026-11-01T08:00:00Z',
+      on: true,
+    }
+    await (await api.as('technician')).agent.post('/api/life-support').send(unit).expect(201)
+    // what the ledger knows stands against what anybody says
+    expect(await said(false)).toEqual(['stop biofilter-on'])
+  })
+})

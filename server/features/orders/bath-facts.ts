@@ -136,6 +136,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
           ozone: machineFact(water, 'ozone'),
           uv: machineFact(water, 'uv'),
           foamFractionator: machineFact(water, 'foam-fractionator'),
+          biofilter: biofilterFact(water),
           aeration: machineFact(water, 'aeration'),
           lights: unknown(),
         },
@@ -232,6 +233,12 @@ function machineFact(water: WaterFacts, kind: LifeSupportKind): Fact<OnOff> {
   const unrecorded = machines.find((machine) => machine.on === null)
   if (unrecorded) return unknown()
   return known('off', machines[0]?.since ?? null, 'the life-support log')
+}
+
+/** Where no biofilter is on the list of machines, another filter may do its work: that is asked, not taken as none. */
+function biofilterFact(water: WaterFacts): Fact<OnOff> {
+  const fact = machineFact(water, 'biofilter')
+  return fact.state === 'not-applicable' ? unknown() : fact
 }
 
 /** Only a confirmed determination that holds for the valves as they stand is a volume to dose by. */

@@ -111,6 +111,8 @@ export interface CautionParams {
   'permanganate-total': { total: CautionQuantity; limit: CautionQuantity }
   'permanganate-total-unknown': { limit: CautionQuantity }
   'permanganate-repeated': { orderNumber: string; limitDays: number }
+  'biofilter-on': Record<never, never>
+  'biofilter-unknown': Record<never, never>
   'over-default': { target: CautionQuantity; high: CautionQuantity; factor: number }
   'far-over-default': { target: CautionQuantity; high: CautionQuantity; factor: number }
   'under-default': { target: CautionQuantity; low: CautionQuantity }
@@ -223,6 +225,8 @@ export type ResolveCode =
   | 'ozone-off'
   | 'uv-off'
   | 'fractionator-off'
+  | 'biofilter-off'
+  | 'say-whether-biofilter'
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'

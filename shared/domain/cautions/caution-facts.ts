@@ -174,6 +174,8 @@ export interface CautionFacts {
     ozone: Fact<OnOff>
     uv: Fact<OnOff>
     foamFractionator: Fact<OnOff>
+    /** On: it stands in the connected water and runs. */
+    biofilter: Fact<OnOff>
     aeration: Fact<OnOff>
     lights: Fact<'full' | 'dimmed' | 'off'>
   }

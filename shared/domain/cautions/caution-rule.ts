@@ -34,6 +34,7 @@ export const cautionRuleIds = [
   'R22',
   'R23',
   'R24',
+  'R25',
   'R26',
   'R27',
   'R28',

@@ -20,6 +20,7 @@ import { tricaine } from './rules/r18-tricaine.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
+import { methyleneBlue } from './rules/r25-methylene-blue.ts'
 import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
@@ -58,6 +59,7 @@ export const cautionRules: readonly CautionRule[] = [
   peroxideSpecies,
   chloramineWater,
   permanganate,
+  methyleneBlue,
   defaultRange,
   basis,
   doseSpacing,

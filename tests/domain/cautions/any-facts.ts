@@ -152,6 +152,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     ozone: anyFact(onOff),
     uv: anyFact(onOff),
     foamFractionator: anyFact(onOff),
+    biofilter: anyFact(onOff),
     aeration: anyFact(onOff),
     lights: anyFact(fc.constantFrom('full' as const, 'dimmed' as const, 'off' as const)),
   }),

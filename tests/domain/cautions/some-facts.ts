@@ -123,6 +123,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       ozone: known('off'),
       uv: known('off'),
       foamFractionator: known('off'),
+      biofilter: known('off'),
       aeration: known('on'),
       lights: known('dimmed'),
     },
