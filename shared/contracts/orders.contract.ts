@@ -190,7 +190,7 @@ export const previewOrder = contract({
   }),
   body: BathOrderFields,
   reply: { 200: OrderPreview },
-  problems: ['not-found', 'dose-line-not-usable'],
+  problems: ['not-found', 'dose-line-not-usable', 'product-not-for-water'],
   idempotent: 'nothing-kept',
 })
 
@@ -202,7 +202,7 @@ export const draftOrder = contract({
   summary: 'Keep a new draft; a technician’s is a proposal',
   body: z.strictObject({ id: RecordId, fields: BathOrderFields }),
   reply: { 201: Order },
-  problems: ['not-found', 'id-already-used', 'dose-line-not-usable'],
+  problems: ['not-found', 'id-already-used', 'dose-line-not-usable', 'product-not-for-water'],
   idempotent: 'by-record-id',
 })
 
@@ -215,7 +215,14 @@ export const reviseDraft = contract({
   params: orderParams,
   body: z.strictObject({ expectedVersion: Version, fields: BathOrderFields }),
   reply: { 200: Order },
-  problems: ['not-found', 'may-not', 'stale-version', 'order-ended', 'dose-line-not-usable'],
+  problems: [
+    'not-found',
+    'may-not',
+    'stale-version',
+    'order-ended',
+    'dose-line-not-usable',
+    'product-not-for-water',
+  ],
 })
 
 /** A caution as it was read: an answer counts for this one alone, in these words. */
@@ -236,6 +243,12 @@ export const signOrder = contract({
   body: z.strictObject({
     password: z.string().min(1).max(200).describe('The signer’s password'),
     expectedVersion: Version,
+    relationship: z
+      .boolean()
+      .optional()
+      .describe(
+        'The signer states a valid veterinarian-client-patient relationship; an extralabel order is not signed without',
+      ),
     read: z.array(AnsweredCaution).max(60).describe('Warnings that the signer has read'),
     overrides: z
       .array(AnsweredCaution.extend({ reason: Reason }))
@@ -253,6 +266,7 @@ export const signOrder = contract({
     'not-as-entered',
     'bad-input',
     'dose-line-not-usable',
+    'product-not-for-water',
     'caution-stops',
     'caution-not-fired',
     'cautions-unread',

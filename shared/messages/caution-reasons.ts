@@ -21,13 +21,16 @@ export const cautionReasonWords = defineMessages({
   R15: 'Ozone and ultraviolet light break drugs down, and oxidants add up.',
   R16: 'A foam fractionator carries the drug out and may overflow.',
   R17: 'Chloroquine is poisonous to algae and some invertebrates, and light breaks it down.',
+  R18: 'Tricaine is a strong acid: without a buffer the pH falls far, in sea water too, and the animals are burnt by it.',
   R22: 'The label of hydrogen peroxide excludes some species and stages; warm water makes it harsher.',
   R23: 'Chloramine-T is more poisonous in acid and soft water.',
   R24: 'In alkaline and hard water permanganate leaves its oxide on the gills, and what is given in a day adds up.',
+  R25: 'Methylene blue stops the bacteria that turn ammonia into nitrate.',
   R26: 'A slip of the decimal point or of the unit shows as a figure far from the range that is used.',
   R27: 'Product, salt, base and free forms differ by factors of two to four: a bare figure is not a dose.',
   R28: 'Doses given too early add up in the animal; those given too late leave gaps.',
   R29: 'Drugs in one water add up, and some of them react with each other.',
+  R30: 'Where a drug harms the biofilter, ammonia and nitrite rise within days, and harm the animals more than what was treated.',
   R31: 'A dose that rests on an old test rests on other water.',
   R32: 'An error of the volume is the same error of the dose.',
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
@@ -52,4 +55,5 @@ export const orderRouteWords = defineMessages({
 /** What a rule may bring besides its level. */
 export const cautionEffectWords = defineMessages({
   secondCalculation: 'a second calculation by another person',
+  task: 'work to do: ammonia and nitrite tested every 12 hours, less fed, water changed',
 } satisfies Record<CautionEffect['kind'], string>)

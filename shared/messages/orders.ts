@@ -1,3 +1,4 @@
+import { capital } from './capital.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 /** Words of treatment orders, on screen and on paper. */
@@ -47,6 +48,18 @@ export const figureChanged = defineMessages({
 })
 
 /** Why an order is refused, and what to do. */
+/**
+ * What a signer states under an extralabel order, in our words.
+ *
+ * @source 21 CFR 530.3(i)(1) to (3), as the treatments reference restates it (V)
+ */
+export const relationshipWords = defineMessages({
+  statement:
+    'I have taken on the medical judgement for these animals, and the facility follows my instructions. I know them well enough for at least a preliminary diagnosis, by a recent examination or by visits to where they are kept. I can be reached for follow-up.',
+  heading: 'Veterinarian-client-patient relationship',
+  needed: 'An extralabel order is signed only with this statement. Read it, and tick it if it is true.',
+})
+
 export const orderProblemWords = defineMessages({
   noLabel:
     'This order is not what was signed, so there is no label for it. Tell a veterinarian and the administrator.',
@@ -62,6 +75,8 @@ export const orderProblemWords = defineMessages({
     'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
   lineOfOther: (p: { line: string; product: string }) =>
     `This dose line is one of ${p.line}, and the product is ${p.product}. Choose a dose line of the product.`,
+  notForWater: (p: { product: string }) =>
+    `${capital(p.product)} is given to the animal itself: no dose line in force says how much of it goes into water. Choose a product that is given into water.`,
   cautionsChanged:
     'Nothing was signed. An answer belongs to no caution that stands now. Read the cautions as they are now, answer those, and sign again.',
 })

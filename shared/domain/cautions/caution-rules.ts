@@ -16,13 +16,16 @@ import { carbon } from './rules/r14-carbon.ts'
 import { ozoneAndUv } from './rules/r15-ozone-and-uv.ts'
 import { foamFractionator } from './rules/r16-foam-fractionator.ts'
 import { chloroquine } from './rules/r17-chloroquine.ts'
+import { tricaine } from './rules/r18-tricaine.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
+import { methyleneBlue } from './rules/r25-methylene-blue.ts'
 import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
 import { otherAgents } from './rules/r29-other-agents.ts'
+import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
 import { lot } from './rules/r34-lot.ts'
@@ -53,13 +56,16 @@ export const cautionRules: readonly CautionRule[] = [
   ozoneAndUv,
   foamFractionator,
   chloroquine,
+  tricaine,
   peroxideSpecies,
   chloramineWater,
   permanganate,
+  methyleneBlue,
   defaultRange,
   basis,
   doseSpacing,
   otherAgents,
+  nitrogenRises,
   staleReadings,
   volume,
   lot,

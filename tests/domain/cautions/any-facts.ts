@@ -72,6 +72,8 @@ const range = fc.record({
   stays: fc.boolean(),
 })
 
+const timed = fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })
+
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
@@ -96,6 +98,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     dosesStillIn: anyFact(fc.nat(5)),
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
+    isBuffered: anyFact(fc.boolean()),
     spacing: anyFact(
       fc.record({
         intervalHours: fc.constantFrom(0, 6, 24, 48, Number.NaN),
@@ -112,10 +115,16 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     recentTemperaturesC: anyFact(fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })),
     oxygenMgPerL: anyFact(figure),
     pH: anyFact(figure),
+    homePh: anyFact(fc.array(fc.record({ value: figure, at: instant }), { maxLength: 2 })),
     alkalinityMgPerLCaCO3: anyFact(figure),
     hardnessMgPerLCaCO3: anyFact(figure),
     freeCopperMgPerL: anyFact(figure),
     totalCopperMgPerL: anyFact(figure),
+    totalAmmoniaNMgPerL: anyFact(figure),
+    nitriteNMgPerL: anyFact(figure),
+    unionisedAmmoniaNMgPerL: anyFact(figure),
+    earlierTotalAmmoniaN: anyFact(timed),
+    earlierNitriteN: anyFact(timed),
     oxygenIsLogged: anyFact(fc.boolean()),
     hasBloom: anyFact(fc.boolean()),
     hasPlantsOrAlgae: anyFact(fc.boolean()),
@@ -150,6 +159,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     ozone: anyFact(onOff),
     uv: anyFact(onOff),
     foamFractionator: anyFact(onOff),
+    biofilter: anyFact(onOff),
     aeration: anyFact(onOff),
     lights: anyFact(fc.constantFrom('full' as const, 'dimmed' as const, 'off' as const)),
   }),
