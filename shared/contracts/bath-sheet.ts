@@ -202,7 +202,9 @@ export const BathSheet = z.object({
         help: z.string().nullable().describe('What was found by the limits that were signed'),
         changed: z
           .array(z.string())
-          .describe('Limits that the facility changed since the signature, and what only those in force find'),
+          .describe(
+            'Limits that the facility changed since the signature, and what only those in force find',
+          ),
         resolve: z.array(z.string()).describe('What would resolve it'),
         place: z
           .enum(['readings', 'volume', 'water', 'animals', 'lot', 'second-calculation'])

@@ -8,9 +8,7 @@ export async function putInForce(api: TestApi, ruleId: string, key: string, valu
     ruleId: string
     parameters: { key: string; unit: string; versions: { id: string }[] }[]
   }[]
-  const parameter = rules
-    .find((rule) => rule.ruleId === ruleId)
-    ?.parameters.find((one) => one.key === key)
+  const parameter = rules.find((rule) => rule.ruleId === ruleId)?.parameters.find((one) => one.key === key)
   if (!parameter) throw new Error(`${ruleId} has no ${key}`)
   const id = api.nextId()
   const at = `/api/caution-rules/${ruleId}/parameters/${key}/proposals`

@@ -83,7 +83,11 @@ export function presentSteps(situation: DoseSituation, calculations: Calculation
   return situation.content.conditions.map(({ ruleId, level, text, secondCalculation }) => {
     const step = { ruleId, level, text, help: null, changed: [], resolve: [], place: null, overridden: false }
     if (secondCalculation)
-      return { ...step, state: agreed ? ('met' as const) : ('unmet' as const), place: 'second-calculation' as const }
+      return {
+        ...step,
+        state: agreed ? ('met' as const) : ('unmet' as const),
+        place: 'second-calculation' as const,
+      }
     const fired = cautions.filter((one) => one.ruleId === ruleId)
     const words = wordsOf(situation, ruleId, fired, zone)
     if (fired.length === 0) return { ...step, ...words, state: 'met' as const }
