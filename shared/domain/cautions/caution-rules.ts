@@ -27,6 +27,7 @@ import { doseSpacing } from './rules/r28-dose-spacing.ts'
 import { otherAgents } from './rules/r29-other-agents.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
+import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
@@ -66,6 +67,7 @@ export const cautionRules: readonly CautionRule[] = [
   otherAgents,
   staleReadings,
   volume,
+  weights,
   lot,
   secondCalculation,
   weakAnimals,
