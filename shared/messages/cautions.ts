@@ -49,6 +49,7 @@ export const cautionRuleWords = defineMessages({
   R27: 'The figure says of what it is',
   R28: 'The dose lies within its window and the planned number',
   R29: 'Other drugs in this water, and the same drug from another order',
+  R30: 'Ammonia and nitrite do not rise under a drug that harms the biofilter',
   R31: 'Water tests are fresh',
   R32: 'The volume is determined, recent, close enough, like the one before, and holds for the valves as they stand',
   R33: 'The weights are recent, weighed, and plausible for the animals',
@@ -70,6 +71,8 @@ export const readingWords = defineMessages({
   hardness: 'hardness',
   'free-copper': 'free copper',
   'total-copper': 'total copper',
+  'total-ammonia': 'total ammonia nitrogen',
+  nitrite: 'nitrite nitrogen',
 } satisfies Record<ReadingName, string>)
 
 /** What kind of water, of a dose line or as it is. */
@@ -137,6 +140,9 @@ export const resolveWords = defineMessages({
   'correct-water': 'Correct the water first.',
   'buffer-the-bath': 'Buffer the bath with bicarbonate to the pH of the home water, and measure it.',
   'say-whether-buffered': 'Say on the order whether the bath is buffered.',
+  'test-nitrogen': 'Test ammonia and nitrite every 12 hours.',
+  'feed-less': 'Feed less, or not at all.',
+  'change-water': 'Change water, and order the dose for what is left of the drug.',
   'test-some-first': 'Treat a few first, and record the test group.',
   'declare-experience': 'A veterinarian may declare earlier experience with this drug in this group.',
   'check-figure': 'Check the figure, its decimal point and its unit.',
@@ -202,6 +208,9 @@ export const ruleParameterWords = defineMessages({
   untimedBathMinutes: 'Longest contact where a dose line for a bath names no time',
   lowFactor: 'Part of the lower end of the range below which a warning is given',
   veryEarlyFactor: 'Part of the interval before which a dose is stopped',
+  risesFactor: 'Times what it was before that count as rising',
+  unionisedMgPerL: 'Highest un-ionised ammonia nitrogen',
+  nitrogenMaxAgeHours: 'Oldest reading of ammonia and nitrite',
   oxygenMinutes: 'Oldest oxygen reading',
   temperatureAndPhHours: 'Oldest temperature and pH reading',
   alkalinityAndHardnessHours: 'Oldest alkalinity and hardness reading',

@@ -149,6 +149,16 @@ export interface CautionParams {
   'plan-long': { days: number; limitDays: number }
   'doses-carried': { given: number; planned: number; lastAt: string; startsAt: string }
   'plan-counts-given': { given: number; planned: number; lastAt: string; startsAt: string }
+  'nitrogen-unknown': { reading: ReadingName; maxAgeHours: number }
+  'nitrogen-before-unknown': { reading: ReadingName }
+  'nitrogen-rising': {
+    reading: ReadingName
+    value: CautionQuantity
+    before: CautionQuantity
+    factor: number
+  }
+  'unionised-ammonia-high': { value: CautionQuantity; limit: CautionQuantity }
+  'unionised-ammonia-unknown': { limit: CautionQuantity }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -235,6 +245,9 @@ export type ResolveCode =
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'
+  | 'test-nitrogen'
+  | 'feed-less'
+  | 'change-water'
   | 'buffer-the-bath'
   | 'say-whether-buffered'
   | 'test-some-first'

@@ -154,6 +154,14 @@ export interface CautionFacts {
     hardnessMgPerLCaCO3: Fact<number>
     freeCopperMgPerL: Fact<number>
     totalCopperMgPerL: Fact<number>
+    /** The newest, as nitrogen. */
+    totalAmmoniaNMgPerL: Fact<number>
+    nitriteNMgPerL: Fact<number>
+    /** Worked out from the newest ammonia, temperature, pH and salinity. */
+    unionisedAmmoniaNMgPerL: Fact<number>
+    /** Readings of the days before the newest, mg/L as nitrogen. */
+    earlierTotalAmmoniaN: Fact<readonly TimedReading[]>
+    earlierNitriteN: Fact<readonly TimedReading[]>
     oxygenIsLogged: Fact<boolean>
     hasBloom: Fact<boolean>
     hasPlantsOrAlgae: Fact<boolean>

@@ -25,6 +25,7 @@ import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
 import { otherAgents } from './rules/r29-other-agents.ts'
+import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
 import { weights } from './rules/r33-weights.ts'
@@ -65,6 +66,7 @@ export const cautionRules: readonly CautionRule[] = [
   basis,
   doseSpacing,
   otherAgents,
+  nitrogenRises,
   staleReadings,
   volume,
   weights,

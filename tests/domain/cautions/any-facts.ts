@@ -74,6 +74,8 @@ const range = fc.record({
   stays: fc.boolean(),
 })
 
+const timed = fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })
+
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
@@ -120,6 +122,11 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     hardnessMgPerLCaCO3: anyFact(figure),
     freeCopperMgPerL: anyFact(figure),
     totalCopperMgPerL: anyFact(figure),
+    totalAmmoniaNMgPerL: anyFact(figure),
+    nitriteNMgPerL: anyFact(figure),
+    unionisedAmmoniaNMgPerL: anyFact(figure),
+    earlierTotalAmmoniaN: anyFact(timed),
+    earlierNitriteN: anyFact(timed),
     oxygenIsLogged: anyFact(fc.boolean()),
     hasBloom: anyFact(fc.boolean()),
     hasPlantsOrAlgae: anyFact(fc.boolean()),
