@@ -129,6 +129,9 @@ export interface RuleParameter {
   mark: SourceMark
   /** Which way the facility may move it freely; the other way loosens the rule. */
   tighter: 'lower' | 'higher'
+  /** Least and most that a facility may confirm, in the unit, where they are not those of `parameterLimits`. */
+  least?: number
+  most?: number
 }
 
 /** A facility's own value, with whoever confirmed it. */
@@ -173,6 +176,10 @@ export interface CautionRule {
   parameters: Readonly<Record<string, RuleParameter>>
   /** The facts it looks at; a test holds it to them. */
   uses: readonly FactPath[]
+  /** All that it can find, each with what would resolve it; a test holds it to them. */
+  findings: Readonly<Partial<Record<CautionCode, readonly ResolveCode[]>>>
+  /** What its findings may bring besides a level; nothing where it does not say. */
+  effects?: readonly CautionEffect['kind'][]
   sources: readonly RuleSource[]
   /** Whether the rule has anything to do with this order at all; decides which conditions are printed. */
   concerns(facts: CautionFacts): boolean

@@ -31,6 +31,15 @@ export const defaultRange = defineRule({
     'water.kind',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'over-default': ['check-figure', 'lower-target'],
+    'far-over-default': ['check-figure', 'lower-target'],
+    'under-default': ['check-figure', 'raise-target'],
+    'no-default-range': ['choose-dose-line', 'check-figure'],
+    'default-not-comparable': ['state-basis', 'check-figure'],
+    'no-line-fits': ['choose-dose-line', 'check-figure', 'confirm-dose-line'],
+    'line-not-named': ['choose-dose-line'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { stopFactor, lowFactor, ...contactLimits }) {

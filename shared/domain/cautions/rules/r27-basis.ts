@@ -11,6 +11,9 @@ export const basis = defineRule({
   routes: orderRoutes,
   parameters: {},
   uses: ['order.target'],
+  findings: {
+    'basis-missing': ['state-basis'],
+  },
   sources: [{ source: 'dose-arithmetic', mark: 'C' }],
   concerns: () => true,
   judge({ order }) {

@@ -27,6 +27,13 @@ export const doseSpacing = defineRule({
     },
   },
   uses: ['order.spacing', 'order.startsAt', 'order.contactMinutes'],
+  findings: {
+    'dose-early': ['wait-for-window'],
+    'dose-very-early': ['wait-for-window', 'amend-order'],
+    'interval-within-contact': ['amend-order', 'check-figure'],
+    'dose-late': ['amend-order'],
+    'doses-past-plan': ['amend-order'],
+  },
   sources: [
     { source: 'hyatt-2017', mark: 'V' },
     { source: 'project-default', mark: 'P' },

@@ -11,6 +11,15 @@ export const lot = defineRule({
   routes: orderRoutes,
   parameters: {},
   uses: ['lot.expiresOn', 'lot.beyondUseOn', 'lot.status'],
+  findings: {
+    'lot-expired': ['use-other-lot'],
+    'lot-expiry-unknown': ['record-lot'],
+    'lot-recalled': ['use-other-lot'],
+    'lot-quarantined': ['use-other-lot'],
+    'lot-status-unknown': ['record-lot'],
+    'lot-beyond-use': ['use-other-lot'],
+    'lot-beyond-use-unknown': ['record-lot'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: () => true,
   judge(facts) {

@@ -39,6 +39,10 @@ export const secondCalculation = defineRule({
     'order.dosesGiven',
     'order.changedSinceLastCalculation',
   ],
+  findings: {
+    'second-calculation': ['calculate-again-by-another'],
+  },
+  effects: ['secondCalculation'],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: (facts) => valueOf(facts.order.isTopUpInsideLimits) !== true,
   judge(facts, limits) {

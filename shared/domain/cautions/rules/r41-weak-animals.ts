@@ -13,6 +13,12 @@ export const weakAnimals = defineRule({
     unwellPercent: { default: 5, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['animals.unwellPercent', 'animals.handledInLast24h'],
+  findings: {
+    'animals-unwell': ['let-animals-rest'],
+    'animals-unwell-unknown': ['look-at-animals'],
+    'animals-handled': ['let-animals-rest'],
+    'animals-handled-unknown': ['look-at-animals'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge({ animals }, { unwellPercent }) {

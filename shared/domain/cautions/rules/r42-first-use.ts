@@ -11,6 +11,10 @@ export const firstUse = defineRule({
   routes: orderRoutes,
   parameters: {},
   uses: ['animals.withoutExperience'],
+  findings: {
+    'first-use': ['test-some-first', 'declare-experience'],
+    'first-use-unknown': ['test-some-first', 'declare-experience'],
+  },
   sources: [
     { source: 'cfr-529-1030', mark: 'V' },
     { source: 'project-default', mark: 'P' },

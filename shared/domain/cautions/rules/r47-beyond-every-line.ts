@@ -23,6 +23,9 @@ export const beyondEveryLine = defineRule({
     beyondFactor: { default: 10, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.target', 'order.agentRanges', 'water.kind', 'lot.densityGPerMl'],
+  findings: {
+    'beyond-every-line': ['check-figure', 'lower-target', 'confirm-dose-line'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { beyondFactor }) {

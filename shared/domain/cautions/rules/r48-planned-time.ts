@@ -22,6 +22,13 @@ export const plannedTime = defineRule({
     planDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.startsAt', 'order.spacing'],
+  findings: {
+    'start-past': ['check-start'],
+    'start-far': ['check-start'],
+    'plan-long': ['check-plan'],
+    'doses-carried': ['check-start'],
+    'plan-counts-given': ['check-start'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { aheadDays, planDays }) {
