@@ -27,6 +27,8 @@ export interface QuantityInput {
   whole?: true
   /** A change or a difference, to which the doubts about a value of its unit do not apply. */
   difference?: true
+  /** A figure of no water, only put in another unit: what is doubted of a water is not doubted of it. */
+  toConvert?: true
   optional?: true
   /** Stable code of the refusal when it is left empty, where more is to be said than that; its sentence is `refusal.<code>`. */
   missing?: string

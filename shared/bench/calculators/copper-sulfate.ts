@@ -5,6 +5,7 @@ import { ok, refuse } from '../../domain/result.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
+import { copperCautions, copperWords } from './parts/copper-words.ts'
 import { measuredFigure } from './parts/measured-figure.ts'
 import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
 
@@ -43,8 +44,7 @@ export const copperSulfate = defineCalculator({
       'Choose what the target is of. Copper and copper sulfate differ by 3.93 times.',
     'caution.above-usual': (p: { low: string; high: string }) =>
       `More free copper than marine systems are usually kept at, ${p.low} to ${p.high} mg/L (from memory). Read the order again: one decimal place is ten times the copper, which kills.`,
-    'caution.invertebrates':
-      'Copper kills invertebrates, and sharks, rays and some bony fish at the level of treatment. Rock and sand take it up and give it back later.',
+    ...copperWords,
     'caution.steps':
       'Raise it in steps over days, test at least daily, and write every reading down before adding.',
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
@@ -80,12 +80,8 @@ export const copperSulfate = defineCalculator({
     volume: { value: '11400', unit: 'L' },
     division: { value: '0.1', unit: 'g' },
   },
-  sources: ['ufifas-fa165', 'iupac-weights'],
-  cautions: [
-    { code: 'invertebrates', level: 'warning' },
-    { code: 'steps', level: 'note' },
-    { code: 'volume', level: 'note' },
-  ],
+  sources: ['ufifas-fa165', 'treatment-practice', 'iupac-weights'],
+  cautions: [...copperCautions, { code: 'steps', level: 'note' }, { code: 'volume', level: 'note' }],
   carries: [
     {
       to: 'order',

@@ -20,6 +20,7 @@ import {
   productWords,
   targetUnits,
 } from './parts/product-input.ts'
+import { volumeTargetCautions, volumeTargetWords } from './parts/volume-target-cautions.ts'
 import { volumeUnits, volumeWords } from './parts/volume-input.ts'
 
 const flowUnits = ['L/min', 'L/h', 'm3/h', 'mL/min', 'gal_us/min'] as const
@@ -73,6 +74,7 @@ export const flowThroughBath = defineCalculator({
     'column.unprimed': 'Without priming',
     'refusal.stock-of-other-kind':
       'Give target and stock both by weight, or both by volume. Undiluted product is 100 % v/v and its target is in µL/L.',
+    ...volumeTargetWords,
     'caution.no-flow':
       'If the water stops and the pump goes on, the tank gets the stock neat. Let the pump stop with the water, or stay beside it.',
     'caution.not-primed':
@@ -176,7 +178,11 @@ export const flowThroughBath = defineCalculator({
       })
       if (!dose.ok) return dose
       const { amount, unit, measured, working } = dose.value
-      return ok({ figures: [measuredFigure('amount', amount, unit, measured)], working })
+      return ok({
+        figures: [measuredFigure('amount', amount, unit, measured)],
+        working,
+        ...volumeTargetCautions(target),
+      })
     }
     if (!stockStrength) return refuse('blank', 'stockStrength', { unit: 'mg/mL' })
     const kind = stockKind(stockStrength, basis)
@@ -215,5 +221,6 @@ function made(
   return ok({
     figures: [{ key: 'concentration', value: concentration.value, unit, kind: 'dose' }],
     working: [line('concentration', expression, concentration.value, unit)],
+    ...volumeTargetCautions({ value: concentration.value, unit }),
   })
 }

@@ -7,6 +7,7 @@ import { enteredTerm } from '../../../domain/working/entered-term.ts'
 import { valueTerm } from '../../../domain/working/value-term.ts'
 import type { BenchLine, Figure, Outcome, Schedule } from '../../definition.ts'
 import { line } from '../../line.ts'
+import { volumeTargetCautions } from './volume-target-cautions.ts'
 
 const perThousand = 1000
 /** A bath counts as reached when only this share of it is missing. */
@@ -66,11 +67,13 @@ export function dripAnswer({ flow, target, stock, volume, duration, unit }: Drip
     figures.push(...used.figures)
     working.push(...used.lines)
   }
+  const byVolume = volumeTargetCautions(target)
   return ok({
     figures,
     working,
     ...(schedule ? { schedule } : {}),
-    cautions: [{ code: volume ? 'prime-whole' : 'not-primed', level: 'warning' }],
+    cautions: [{ code: volume ? 'prime-whole' : 'not-primed', level: 'warning' }, ...byVolume.cautions],
+    sources: byVolume.sources,
   })
 }
 

@@ -1,6 +1,6 @@
 import { exceeds } from '../../../domain/cautions/exceeds.ts'
 import type { SourceKey } from '../../../domain/sources.ts'
-import type { ParsedQuantity } from '../../../domain/units/parse-quantity.ts'
+import type { UnitCode } from '../../../domain/units/unit-table.ts'
 import type { BenchCaution } from '../../definition.ts'
 
 /** The highest figure on a label of formalin, µL/L, for eggs. @source cfr-529-1030 */
@@ -14,8 +14,12 @@ export const volumeTargetWords = {
     'More than 2,000 µL/L, the highest figure on a label of formalin, which is for eggs. Read the order again, and in which unit it is.',
 } as const
 
-/** What a target by volume asks to be said; nothing of a target by weight. */
-export function volumeTargetCautions(target: ParsedQuantity | undefined): {
+/**
+ * What a target by volume asks to be said; nothing of a target by weight.
+ *
+ * @param target in the canonical unit of its dimension: µL/L, or mg/L
+ */
+export function volumeTargetCautions(target: { value: number; unit: UnitCode } | undefined): {
   cautions: readonly BenchCaution[]
   sources: readonly SourceKey[]
 } {
