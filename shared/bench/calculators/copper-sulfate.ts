@@ -1,3 +1,4 @@
+import { copperConcentration } from '../../domain/cautions/copper-concentration.ts'
 import { exceeds } from '../../domain/cautions/exceeds.ts'
 import { copperInPentahydrate } from '../../domain/dose/copper.ts'
 import { computeBathDose } from '../../domain/dose/compute-bath-dose.ts'
@@ -108,7 +109,13 @@ export const copperSulfate = defineCalculator({
     })
     if (!dose.ok) return dose
     const { amount, unit, measured: weighed, working } = dose.value
-    const isAboveUsual = targetOf === 'copper' && exceeds(target.value, usualMgPerL.high)
+    // whatever the target is of, it is the copper that kills
+    const copper = copperConcentration({
+      value: target.value,
+      unit: 'mg/L',
+      basis: targetOf === 'copper' ? 'free' : 'salt',
+    })
+    const isAboveUsual = copper !== null && exceeds(copper.copperMgPerL, usualMgPerL.high)
     const cautions: BenchCaution[] = isAboveUsual
       ? [{ code: 'above-usual', level: 'warning', params: usualMgPerL }]
       : []
