@@ -39,6 +39,8 @@ export interface QuantityInput {
   reading?: ReadingParameter
   /** What such a reading says about choices, which it answers where it fills the field: nitrogen is always as N. */
   readingSays?: Readonly<Record<string, string>>
+  /** The choice that the scale of such a reading answers: a pH of one scale is not one of another. */
+  readingScaleIn?: string
   /** The volume that the enclosure is dosed by fills it. */
   netVolume?: true
 }
