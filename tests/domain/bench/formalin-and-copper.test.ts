@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { calculatorAt } from '../../../shared/bench/calculators.ts'
+import { sayCaution } from '../../../shared/bench/words.ts'
 import { ask } from './ask.ts'
 
 type Body = Readonly<Record<string, string>>
@@ -128,6 +129,18 @@ describe('more copper than is usual', () => {
     ['compound', '2.9 mg/L', true],
   ])('is said of a target of %s of %s: %s', async (targetOf, target, above) => {
     const given = { product: 'pentahydrate', targetOf, target, volume: '11400 L' }
-    expect((await warningsOf('copper-sulfate', given)).includes('above-usual')).toBe(above)
+    const code = targetOf === 'copper' ? 'above-usual' : 'compound-above-usual'
+    expect((await warningsOf('copper-sulfate', given)).includes(code)).toBe(above)
+  })
+
+  // 2.9 mg/L × 63.546 ÷ 249.685 is 0.738 mg/L of copper (by hand); 2.5 mg/L: UF/IFAS FA008
+  it('tells how much copper a target of the compound is, and that fresh water has a limit of its own', async () => {
+    const of = calculatorAt('copper-sulfate')
+    const given = { product: 'pentahydrate', targetOf: 'compound', target: '2.9 mg/L', volume: '11400 L' }
+    const caution = (await ask('copper-sulfate', given)).cautions.find(
+      ({ code }) => code === 'compound-above-usual',
+    )
+    const words = of && caution ? sayCaution(of, caution) : ''
+    expect(words).toMatch(/0\.738 mg\/L of copper.*0\.15 to 0\.2.*from memory.*alkalinity.*2\.5 mg\/L/)
   })
 })
