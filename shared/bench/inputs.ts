@@ -27,6 +27,8 @@ export interface QuantityInput {
   whole?: true
   /** A change or a difference, to which the doubts about a value of its unit do not apply. */
   difference?: true
+  /** A figure of no water, only put in another unit: what is doubted of a water is not doubted of it. */
+  toConvert?: true
   optional?: true
   /** Stable code of the refusal when it is left empty, where more is to be said than that; its sentence is `refusal.<code>`. */
   missing?: string
@@ -37,6 +39,8 @@ export interface QuantityInput {
   reading?: ReadingParameter
   /** What such a reading says about choices, which it answers where it fills the field: nitrogen is always as N. */
   readingSays?: Readonly<Record<string, string>>
+  /** The choice that the scale of such a reading answers: a pH of one scale is not one of another. */
+  readingScaleIn?: string
   /** The volume that the enclosure is dosed by fills it. */
   netVolume?: true
 }

@@ -89,9 +89,9 @@ function readQuantity(
   return parsed
 }
 
-/** A salinity of a water, not a difference between two. */
-const isSalinity = ({ unit }: ParsedQuantity, { difference }: QuantityInput): boolean =>
-  !difference && (unit === 'PSS-78' || unit === 'g/kg')
+/** A salinity of a water: not a difference between two, and not a figure that is only put in another unit. */
+const isSalinity = ({ unit }: ParsedQuantity, { difference, toConvert }: QuantityInput): boolean =>
+  !difference && !toConvert && (unit === 'PSS-78' || unit === 'g/kg')
 
 const isOf = (dimension: Dimension, typed: unknown): boolean => {
   const unit = findUnit(typed, { dimension })

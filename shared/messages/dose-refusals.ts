@@ -25,7 +25,7 @@ export const doseRefusals = defineMessages({
   'strength-above-all': (p) =>
     `${p.What} cannot be more than ${p.said('limit')} ${p.unit}. Check the number and its unit on the label.`,
   'density-missing': () =>
-    'Type the density of the product in g/mL. Without it a percentage by weight says nothing about a volume.',
+    'Type the density of the product in g/mL. Without it a weight, or a share of the weight, says nothing about a volume.',
   'share-missing': () =>
     'The target is of one substance and the label of another. Give the molar masses of both, or choose the same basis.',
   'share-outside-range': () =>

@@ -11,6 +11,8 @@ export const partWords = defineMessages({
   unit: (p: { field: string }) => `Unit of ${p.field}`,
   keepOrConvert: (p: { value: string; from: string; to: string }) =>
     `You typed ${p.value}\u00a0${p.from}. Keep the number in ${p.to}, or convert it?`,
+  keepOnly: (p: { value: string; from: string; to: string }) =>
+    `You typed ${p.value}\u00a0${p.from}. Nothing here turns ${p.from} into ${p.to}. Is the number one of ${p.to}?`,
   keepNumber: (p: { value: string; unit: string }) => `Keep ${p.value}\u00a0${p.unit}`,
   convertNumber: (p: { value: string; unit: string }) => `Convert to ${p.value}\u00a0${p.unit}`,
   backToUnit: (p: { unit: string }) => `Back to ${p.unit}`,

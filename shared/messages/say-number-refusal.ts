@@ -1,4 +1,5 @@
 import type { DoseRefusal } from '../domain/dose/dose-refusal.ts'
+import { groupThousands } from '../domain/quantities/number-text.ts'
 import type { Refusal } from '../domain/result.ts'
 import { isUnitCode } from '../domain/units/is-unit-code.ts'
 import type { ArithmeticRefusal } from '../domain/units/arithmetic-refusal.ts'
@@ -49,6 +50,12 @@ function wordsOf(refusal: Refusal, label: string | undefined): RefusalWords {
     example: example === undefined ? '' : `, for example ${example}`,
     inUnit: known === undefined || unitOf(known).symbol === '' ? '' : ` in ${unitNames[known]}`,
     unit: known === undefined ? '' : unitOf(known).symbol,
-    said: (key) => String(refusal.params?.[key] ?? ''),
+    said: (key) => {
+      const text = String(refusal.params?.[key] ?? '')
+      return asTyped.includes(key) || !/^-?\d+(\.\d+)?$/.test(text) ? text : groupThousands(text)
+    },
   }
 }
+
+/** What a person typed, or how they are to type it: never in groups, which are refused. */
+const asTyped = ['typed', 'grouped', 'decimal']

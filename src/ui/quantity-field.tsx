@@ -127,6 +127,8 @@ function UnitQuestion({
   onAnswer: (how: 'keep' | 'convert' | 'back') => void
 }) {
   const first = useRef<HTMLDivElement>(null)
+  const question = converted === null ? partWords.keepOnly : partWords.keepOrConvert
+  const asked = question({ value, from, to })
   useEffect(() => {
     first.current?.querySelector('button')?.focus()
   }, [])
@@ -135,7 +137,7 @@ function UnitQuestion({
       ref={first}
       role="group"
       className="unit-question mt-1"
-      aria-label={partWords.keepOrConvert({ value, from, to })}
+      aria-label={asked}
       onKeyDown={(event) => {
         if (event.key !== 'Escape') return
         event.stopPropagation()
@@ -143,7 +145,7 @@ function UnitQuestion({
         onAnswer('back')
       }}
     >
-      <p>{partWords.keepOrConvert({ value, from, to })}</p>
+      <p>{asked}</p>
       <Button size="small" onClick={() => onAnswer('keep')}>
         {partWords.keepNumber({ value, unit: to })}
       </Button>

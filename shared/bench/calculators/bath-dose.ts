@@ -15,7 +15,7 @@ import {
   productWords,
   targetUnits,
 } from './parts/product-input.ts'
-import { volumeTargetCautions, volumeTargetWords } from './parts/volume-target-cautions.ts'
+import { formalinCautions, formalinWords } from './parts/formalin-cautions.ts'
 import { volumeInputs, volumeWords, withVolumeAsEntered } from './parts/volume-input.ts'
 
 /** Whatever combination of target, strength and volume a person has: the amount of product for a bath in standing water. */
@@ -37,7 +37,7 @@ export const bathDose = defineCalculator({
     'input.present': 'Concentration there already, by a test',
     'input.division': 'Smallest step of the balance or measure',
     'result.amount': 'Product to add',
-    ...volumeTargetWords,
+    ...formalinWords,
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
     'caution.second':
       'Let another person work it out without seeing this figure, from the label and the mark.',
@@ -89,7 +89,7 @@ export const bathDose = defineCalculator({
     return ok({
       figures: [measuredFigure('amount', amount, unit, measured)],
       working: withVolumeAsEntered(working, volume),
-      ...volumeTargetCautions(target),
+      ...formalinCautions(given),
     })
   },
 })

@@ -11,6 +11,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution, type BenchLine, type Figure } from '../definition.ts'
 import { quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { formalinCautions, formalinWords } from './parts/formalin-cautions.ts'
 import {
   basisInput,
   basisWords,
@@ -46,6 +47,7 @@ export const concentrationReached = defineCalculator({
       `This is more than ${p.most} % above the target. Tell the veterinarian now. Water changes thin it; the calculator of water changes says how many.`,
     'caution.below-wanted': (p: { most: string }) =>
       `This is more than ${p.most} % below the target. Add nothing before the veterinarian has been asked.`,
+    ...formalinWords,
     'caution.what-went-in':
       'This is what went in, evenly mixed and before any loss. What was in the water before is not counted: only a test says what is there.',
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
@@ -104,10 +106,12 @@ export const concentrationReached = defineCalculator({
     if (!compared.ok) return compared
     const [first, ...rest] = figures
     if (first === undefined) return refuse('blank', 'amount')
+    const asked = formalinCautions({ ...given, target: first })
     return ok({
       figures: [first, ...rest, ...(compared.value ? [compared.value.figure] : [])],
       working: [...withVolumeAsEntered(working, volume), ...(compared.value ? [compared.value.line] : [])],
-      cautions: compared.value?.cautions ?? [],
+      cautions: [...(compared.value?.cautions ?? []), ...asked.cautions],
+      sources: asked.sources,
     })
   },
 })

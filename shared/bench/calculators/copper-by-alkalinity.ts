@@ -10,6 +10,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution, type BenchLine } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { copperCautions, copperWords } from './parts/copper-words.ts'
 import { measuredFigure } from './parts/measured-figure.ts'
 import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
 
@@ -49,8 +50,7 @@ export const copperByAlkalinityCalculator = defineCalculator({
       'The rule is of copper sulfate. Dose a chelated product by its label, in total copper, and test it the way its maker says.',
     'caution.capped': (p: { cap: string }) =>
       `More than ${p.cap} mg/L of alkalinity is counted as ${p.cap} (common practice, from memory).`,
-    'caution.invertebrates':
-      'Copper kills invertebrates, and rays and some bony fish at the level of treatment. Look who lives in this water first.',
+    ...copperWords,
     'caution.least': (p: { least: string }) =>
       `Below ${p.least} mg/L of alkalinity no copper is used without a bioassay: measure it again before every dose.`,
     'caution.oxygen':
@@ -96,9 +96,9 @@ export const copperByAlkalinityCalculator = defineCalculator({
     volumeError: { value: '5', unit: 'percent' },
     division: { value: '0.1', unit: 'g' },
   },
-  sources: ['mcnevin-2003', 'copper-alkalinity-limits', 'iupac-weights'],
+  sources: ['mcnevin-2003', 'copper-alkalinity-limits', 'treatment-practice', 'iupac-weights'],
   cautions: [
-    { code: 'invertebrates', level: 'warning' },
+    ...copperCautions,
     {
       code: 'least',
       level: 'warning',

@@ -1,15 +1,21 @@
+import { copperConcentration } from '../../domain/cautions/copper-concentration.ts'
 import { exceeds } from '../../domain/cautions/exceeds.ts'
 import { copperInPentahydrate } from '../../domain/dose/copper.ts'
 import { computeBathDose } from '../../domain/dose/compute-bath-dose.ts'
+import { withoutTrailingZeros } from '../../domain/quantities/number-text.ts'
 import { ok, refuse } from '../../domain/result.ts'
 import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
+import { copperCautions, copperWords } from './parts/copper-words.ts'
 import { measuredFigure } from './parts/measured-figure.ts'
 import { volumeUnits, withVolumeAsEntered } from './parts/volume-input.ts'
 
 /** Free copper that marine systems are usually kept at. @source ufifas-fa165, the range from memory */
 const usualMgPerL = { low: 0.15, high: 0.2 }
+
+/** Copper sulfate pentahydrate in fresh water, whatever its alkalinity, mg/L. @source ufifas-fa008 */
+const mostFreshMgPerL = 2.5
 
 /** Grams of copper sulfate for a target of free copper, or for what a test says is missing. */
 export const copperSulfate = defineCalculator({
@@ -43,8 +49,9 @@ export const copperSulfate = defineCalculator({
       'Choose what the target is of. Copper and copper sulfate differ by 3.93 times.',
     'caution.above-usual': (p: { low: string; high: string }) =>
       `More free copper than marine systems are usually kept at, ${p.low} to ${p.high} mg/L (from memory). Read the order again: one decimal place is ten times the copper, which kills.`,
-    'caution.invertebrates':
-      'Copper kills invertebrates, and sharks, rays and some bony fish at the level of treatment. Rock and sand take it up and give it back later.',
+    'caution.compound-above-usual': (p: { copper: string; low: string; high: string; most: string }) =>
+      `This target is ${p.copper} mg/L of copper. Marine systems are usually kept at ${p.low} to ${p.high} mg/L of it (from memory). In fresh water the alkalinity sets the dose, and never more than ${p.most} mg/L of the pentahydrate: the calculator of copper by alkalinity works it out. Read the order again.`,
+    ...copperWords,
     'caution.steps':
       'Raise it in steps over days, test at least daily, and write every reading down before adding.',
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
@@ -80,12 +87,8 @@ export const copperSulfate = defineCalculator({
     volume: { value: '11400', unit: 'L' },
     division: { value: '0.1', unit: 'g' },
   },
-  sources: ['ufifas-fa165', 'iupac-weights'],
-  cautions: [
-    { code: 'invertebrates', level: 'warning' },
-    { code: 'steps', level: 'note' },
-    { code: 'volume', level: 'note' },
-  ],
+  sources: ['ufifas-fa165', 'ufifas-fa008', 'treatment-practice', 'iupac-weights'],
+  cautions: [...copperCautions, { code: 'steps', level: 'note' }, { code: 'volume', level: 'note' }],
   carries: [
     {
       to: 'order',
@@ -112,10 +115,27 @@ export const copperSulfate = defineCalculator({
     })
     if (!dose.ok) return dose
     const { amount, unit, measured: weighed, working } = dose.value
-    const isAboveUsual = targetOf === 'copper' && exceeds(target.value, usualMgPerL.high)
-    const cautions: BenchCaution[] = isAboveUsual
-      ? [{ code: 'above-usual', level: 'warning', params: usualMgPerL }]
-      : []
+    // whatever the target is of, it is the copper that kills
+    const copper = copperConcentration({
+      value: target.value,
+      unit: 'mg/L',
+      basis: targetOf === 'copper' ? 'free' : 'salt',
+    })
+    const isAboveUsual = copper !== null && exceeds(copper.copperMgPerL, usualMgPerL.high)
+    const cautions: BenchCaution[] = []
+    if (isAboveUsual && targetOf === 'copper')
+      cautions.push({ code: 'above-usual', level: 'warning', params: usualMgPerL })
+    // fresh water is dosed by the compound, and by its alkalinity
+    if (isAboveUsual && targetOf === 'compound')
+      cautions.push({
+        code: 'compound-above-usual',
+        level: 'warning',
+        params: {
+          ...usualMgPerL,
+          copper: withoutTrailingZeros(copper.copperMgPerL.toPrecision(3)),
+          most: mostFreshMgPerL,
+        },
+      })
     return ok({
       figures: [measuredFigure('amount', amount, unit, weighed)],
       working: withVolumeAsEntered(working, volume),

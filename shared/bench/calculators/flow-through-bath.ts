@@ -20,6 +20,7 @@ import {
   productWords,
   targetUnits,
 } from './parts/product-input.ts'
+import { formalinCautions, formalinWords } from './parts/formalin-cautions.ts'
 import { volumeUnits, volumeWords } from './parts/volume-input.ts'
 
 const flowUnits = ['L/min', 'L/h', 'm3/h', 'mL/min', 'gal_us/min'] as const
@@ -73,6 +74,7 @@ export const flowThroughBath = defineCalculator({
     'column.unprimed': 'Without priming',
     'refusal.stock-of-other-kind':
       'Give target and stock both by weight, or both by volume. Undiluted product is 100 % v/v and its target is in µL/L.',
+    ...formalinWords,
     'caution.no-flow':
       'If the water stops and the pump goes on, the tank gets the stock neat. Let the pump stop with the water, or stay beside it.',
     'caution.not-primed':
@@ -176,16 +178,22 @@ export const flowThroughBath = defineCalculator({
       })
       if (!dose.ok) return dose
       const { amount, unit, measured, working } = dose.value
-      return ok({ figures: [measuredFigure('amount', amount, unit, measured)], working })
+      return ok({
+        figures: [measuredFigure('amount', amount, unit, measured)],
+        working,
+        ...formalinCautions({ ...given, form: given.form ?? 'liquid' }),
+      })
     }
     if (!stockStrength) return refuse('blank', 'stockStrength', { unit: 'mg/mL' })
     const kind = stockKind(stockStrength, basis)
     if (!kind.ok) return kind
     if (find === 'concentration')
-      return drip ? made(flow, drip, stockStrength, kind.value) : refuse('blank', 'drip', { unit: 'mL/min' })
+      return drip
+        ? made(flow, drip, { strength: stockStrength, basis }, kind.value)
+        : refuse('blank', 'drip', { unit: 'mL/min' })
     if (!target) return refuse('blank', 'target', { unit: 'mg/L' })
     if (target.unit !== stockStrength.unit) return refuse('stock-of-other-kind', 'stockStrength')
-    return dripAnswer({ flow, target, stock: stockStrength, volume, duration, unit: kind.value })
+    return dripAnswer({ flow, target, basis, stock: stockStrength, volume, duration, unit: kind.value })
   },
 })
 
@@ -199,7 +207,7 @@ function stockKind(stock: ParsedQuantity, basis: string): Result<'mg/L' | 'uL/L'
 function made(
   flow: ParsedQuantity,
   drip: ParsedQuantity,
-  stock: ParsedQuantity,
+  { strength: stock, basis }: { strength: ParsedQuantity; basis: string },
   unit: Extract<UnitCode, 'mg/L' | 'uL/L'>,
 ): Result<Outcome> {
   const concentration = dripConcentration({
@@ -215,5 +223,12 @@ function made(
   return ok({
     figures: [{ key: 'concentration', value: concentration.value, unit, kind: 'dose' }],
     working: [line('concentration', expression, concentration.value, unit)],
+    ...formalinCautions({
+      target: { value: concentration.value, unit },
+      basis,
+      form: 'liquid',
+      strength: stock,
+      strengthOf: basis,
+    }),
   })
 }

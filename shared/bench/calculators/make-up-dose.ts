@@ -17,7 +17,7 @@ import {
   productWords,
   targetUnits,
 } from './parts/product-input.ts'
-import { volumeTargetCautions, volumeTargetWords } from './parts/volume-target-cautions.ts'
+import { formalinCautions, formalinWords } from './parts/formalin-cautions.ts'
 import { volumeInputs, volumeUnits, volumeWords, withVolumeAsEntered } from './parts/volume-input.ts'
 
 const tested = ['mg/L', 'ug/L', 'g/L'] as const
@@ -57,7 +57,7 @@ export const makeUpDose = defineCalculator({
       'The bath is taken to have been at its target before the change: what was lost otherwise is not in this. Where a test exists, test after the change and make up by the test.',
     'caution.not-measured':
       'Nothing was measured. Warm, lit or filtered water can lose a drug much faster than cold, dark water, or not at all: where a test exists, test first. Made up for a loss that did not happen, the bath is too strong.',
-    ...volumeTargetWords,
+    ...formalinWords,
     'caution.order': 'Whether a bath is made up at all, and how often, is for the order to say.',
     'caution.volume': 'A wrong volume is a wrong dose: say how the volume was found, and when.',
   }),
@@ -121,7 +121,7 @@ export const makeUpDose = defineCalculator({
     const { amount, unit, measured, working } = dose.value
     // of a change alone the first line is the water that was changed, not the volume of the bath
     const first = given.after === 'change' && !given.before ? (given.changed ?? volume) : volume
-    const byVolume = volumeTargetCautions(target)
+    const byVolume = formalinCautions(given)
     return ok({
       figures: [measuredFigure('amount', amount, unit, measured)],
       working: withVolumeAsEntered(working, first),

@@ -153,9 +153,11 @@ export const oxygenSaturation = defineCalculator({
     const { figures, lines, mgPerL, share } = found.value
     const [first, ...rest] = figures
     const isStandard = air.value.key === 'one-atmosphere'
+    // what the water could hold is no reading of it: nobody has found too little
+    const isLow = find !== 'saturation' && mgPerL < oxygenFloorMgPerL
     const cautions: BenchCaution[] = [
       ...(share > mostSaturationPercent ? [warning('supersaturated', { most: mostSaturationPercent })] : []),
-      ...(mgPerL < oxygenFloorMgPerL ? [warning('low', { floor: oxygenFloorMgPerL })] : []),
+      ...(isLow ? [warning('low', { floor: oxygenFloorMgPerL })] : []),
       ...air.value.cautions,
       isStandard ? warning('one-atmosphere') : { code: 'vapour', level: 'note' },
     ]
@@ -171,7 +173,7 @@ export const oxygenSaturation = defineCalculator({
         ...air.value.sources,
         ...(isStandard ? [] : (['benson-krause-vapour'] as const)),
         ...(share > mostSaturationPercent ? (['gas-supersaturation'] as const) : []),
-        ...(mgPerL < oxygenFloorMgPerL ? (['cfr-529-1030', 'project-default'] as const) : []),
+        ...(isLow ? (['cfr-529-1030', 'project-default'] as const) : []),
       ],
     })
   },

@@ -1,5 +1,7 @@
 import { ammoniaBases, ammoniaCountedAs } from '../../domain/ammonia/nitrogen-forms.ts'
+import { exceeds } from '../../domain/cautions/exceeds.ts'
 import {
+  harmfulNMgPerL,
   phCalibrations,
   unionisedConcentration,
   type UnionisedAmmonia,
@@ -58,6 +60,8 @@ export const unionisedAmmoniaCalculator = defineCalculator({
     'refusal.ammonia-basis-not-stated':
       'Choose what the test counts ammonia as: nitrogen, NH₃ or NH₄. The same water reads 22 % or 29 % higher as NH₃ or NH₄.',
     'caution.ph': 'A pH wrong by 0.1 changes the share by about a quarter.',
+    'caution.harmful': (p: { most: string }) =>
+      `More than ${p.most} mg/L of un-ionised ammonia as nitrogen, a level at which fish suffer (from memory). Test again, feed less, change water, and tell the veterinarian.`,
     'caution.kit': 'Some kits count what a chloramine remover holds bound, and read high.',
     'caution.electrode': 'An electrode in salt water adds about 0.05 pH of its own, 12 % of the share.',
     'caution.scale-not-known':
@@ -76,6 +80,7 @@ export const unionisedAmmoniaCalculator = defineCalculator({
       units: ['pH'],
       limits: { min: 4, max: 11, plausible: { min: 6, max: 9 } },
       reading: 'ph',
+      readingScaleIn: 'calibration',
     }),
     temperature: quantity({ units: ['degC', 'degF'], limits: { min: -2, max: 40 }, reading: 'temperature' }),
     salinity: quantity({ units: ['PSS-78'], limits: { min: 0, max: 40 }, reading: 'salinity' }),
@@ -154,10 +159,18 @@ export const unionisedAmmoniaCalculator = defineCalculator({
         ...(cautious ? cautiousLines(cautious.value, water, nitrogen) : []),
       ],
       cautions: [
+        ...(exceeds((cautious?.value ?? found.value).nMgPerL, harmfulNMgPerL)
+          ? [{ code: 'harmful', level: 'warning' as const, params: { most: harmfulNMgPerL } }]
+          : []),
         ...(cautious ? [{ code: 'scale-not-known', level: 'warning' as const }] : []),
         ...salt.map((code) => ({ code, level: 'note' as const })),
       ],
-      sources: constant === 'emerson' ? ['emerson-1975'] : ['clegg-whitfield-1995', 'ph-scale-rule'],
+      sources: [
+        ...(constant === 'emerson'
+          ? (['emerson-1975'] as const)
+          : (['clegg-whitfield-1995', 'ph-scale-rule'] as const)),
+        'treatment-practice',
+      ],
     })
   },
 })

@@ -36,7 +36,7 @@ export const unitConversion = defineCalculator({
       'The unit changes, what it is of does not: mg/L of copper is not mg/L of copper sulfate.',
   }),
   inputs: {
-    from: quantity({ units: codes }),
+    from: quantity({ units: codes, toConvert: true }),
     to: choice(codes, { unitsOf: 'from', missing: 'not-chosen' }),
   },
   fields: { value: 'from' },

@@ -12,6 +12,9 @@ import {
 
 export type AmmoniaRefusal = LimitRefusal | 'not-finite' | 'ph-scale-not-stated'
 
+/** Un-ionised ammonia, as nitrogen, above which fish suffer. @source treatment-practice, from memory */
+export const harmfulNMgPerL = 0.05
+
 /** From this salinity on the water is brackish, and the scale of the pH matters. */
 export const brackishFrom = 0.5
 

@@ -45,10 +45,11 @@ export function compoundNeeded(
     key: 'compound',
     code: 'product-mass',
     params: {},
-    expression: `${valueTerm(active.value, 'mg')} / (${valueTerm(percent, 'percent')} / 100) to mg`,
+    // by the masses themselves: the share as shown is rounded, and whoever works it out again would get another figure
+    expression: `${valueTerm(active.value, 'mg')} / (${share.activeGPerMol} / ${share.compoundGPerMol}) to mg`,
     value: milligrams,
     unit: 'mg',
-    rests: [active.key, 'active-share'],
+    rests: [active.key],
   }
   return ok({ mass, lines: [active, shareLine, mass] })
 }

@@ -101,7 +101,11 @@ function readingFigure(
         ...(row.below ? [words.readingBelow] : fill ? [] : [words.readingUnit]),
       ].join(' '),
     oldAt: (now) => (minutesBetween(row.happenedAt, now) > minutes ? words.readingOld({ minutes }) : null),
-    ...(input.readingSays ? { answers: input.readingSays } : {}),
+    answers: {
+      ...input.readingSays,
+      // a scale that nobody noted is asked of the person, not left at what stood there before
+      ...(input.readingScaleIn ? { [input.readingScaleIn]: row.scale ?? '' } : {}),
+    },
   }
 }
 

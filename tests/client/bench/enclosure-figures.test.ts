@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { bathDose } from '../../../shared/bench/calculators/bath-dose.ts'
 import { copperSulfate } from '../../../shared/bench/calculators/copper-sulfate.ts'
+import { unionisedAmmoniaCalculator } from '../../../shared/bench/calculators/unionised-ammonia.ts'
 import { salinityChange } from '../../../shared/bench/calculators/salinity-change.ts'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { WaterOfEnclosure } from '../../../shared/contracts/water.contract.ts'
@@ -126,5 +127,31 @@ describe('figures of an enclosure on the bench', () => {
     const other = withEnclosureFigures(kept, enclosureFigures(bathDose, water(), zone), found)
     expect(other['volume']).toEqual({ value: '2200', unit: 'L' })
     expect(other['volumeError']).toEqual({ value: '', unit: 'percent' })
+  })
+})
+
+describe('the scale of a pH', () => {
+  const of = unionisedAmmoniaCalculator
+  const ph = (scale: string | null) =>
+    water({ latest: [{ ...reading('ph', '8.1', 'pH', '2026-12-01T18:00:00.000Z'), scale }] })
+  const filled = (scale: string | null, stood: string) =>
+    withEnclosureFigures(
+      { ...emptyDraft(of, {}), calibration: stood },
+      enclosureFigures(of, ph(scale), zone),
+      {},
+    )
+  it('goes with the reading, whatever stood there before', () => {
+    expect(filled('total', 'nbs')).toMatchObject({ ph: { value: '8.1' }, calibration: 'total' })
+    expect(filled('nbs', 'unknown')).toMatchObject({ calibration: 'nbs' })
+  })
+  it('is asked for where nobody noted it', () => {
+    expect(filled(null, 'nbs')).toMatchObject({ ph: { value: '8.1' }, calibration: '' })
+  })
+  it('is left alone where the pH was typed', () => {
+    const draft = { ...emptyDraft(of, {}), ph: { value: '8.0', unit: 'pH' }, calibration: 'nbs' }
+    expect(withEnclosureFigures(draft, enclosureFigures(of, ph('total'), zone), {})).toMatchObject({
+      ph: { value: '8.0' },
+      calibration: 'nbs',
+    })
   })
 })

@@ -104,9 +104,13 @@ describe('a bath by volume', () => {
   })
   it('says it of a make-up dose too', async () => {
     const change = { ...given, after: 'change', changed: '500 L' }
-    expect(await warningsOf('make-up-dose', change)).toEqual(['taken-at-target', 'formalin'])
+    expect(await warningsOf('make-up-dose', change)).toEqual([
+      'taken-at-target',
+      'formalin',
+      'formalin-people',
+    ])
     const strong = await warningsOf('make-up-dose', { ...change, target: '2.5 mL/L' })
-    expect(strong).toEqual(['taken-at-target', 'above-labels', 'formalin'])
+    expect(strong).toEqual(['taken-at-target', 'above-labels', 'formalin', 'formalin-people'])
     expect(await said('make-up-dose', change, 'formalin')).toMatch(/white precipitate/)
   })
   it('is doubted above the highest figure of a label', async () => {

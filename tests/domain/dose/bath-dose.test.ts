@@ -44,7 +44,7 @@ describe('a bath by the active substance', () => {
       'Rise needed | 0.05 mg/L − 0.00 mg/L | 0.05 mg/L',
       'Active substance needed | 2,217.6 L × 0.05 mg/L | 110.9 mg',
       'Share of active substance | 63.546 ÷ 249.685 × 100 | 25.45 %',
-      'Product | 110.88 mg ÷ (25.45 ÷ 100) | 435.7 mg',
+      'Product | 110.88 mg ÷ (63.546 ÷ 249.685) | 435.7 mg',
       'Product at its purity | 435.7 mg ÷ (99 ÷ 100) | 0.4401 g',
     ])
   })

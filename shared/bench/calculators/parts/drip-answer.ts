@@ -7,6 +7,7 @@ import { enteredTerm } from '../../../domain/working/entered-term.ts'
 import { valueTerm } from '../../../domain/working/value-term.ts'
 import type { BenchLine, Figure, Outcome, Schedule } from '../../definition.ts'
 import { line } from '../../line.ts'
+import { formalinCautions } from './formalin-cautions.ts'
 
 const perThousand = 1000
 /** A bath counts as reached when only this share of it is missing. */
@@ -17,6 +18,8 @@ interface Drip {
   flow: ParsedQuantity
   /** Target and stock are both by weight or both by volume. */
   target: ParsedQuantity
+  /** What both are of. */
+  basis: string
   stock: ParsedQuantity
   volume: ParsedQuantity | undefined
   duration: ParsedQuantity | undefined
@@ -24,7 +27,7 @@ interface Drip {
 }
 
 /** The drip of a stock into a flow, with what primes the tank and what the whole time takes. */
-export function dripAnswer({ flow, target, stock, volume, duration, unit }: Drip): Result<Outcome> {
+export function dripAnswer({ flow, target, basis, stock, volume, duration, unit }: Drip): Result<Outcome> {
   // a litre of undiluted product in a litre is a million microlitres, as a kilogram is a million milligrams
   const asked = { targetMgPerL: target.value, stockMgPerMl: stock.value / perThousand }
   const [water, wanted, strength] = [enteredTerm(flow), enteredTerm(target), enteredTerm(stock)]
@@ -66,11 +69,13 @@ export function dripAnswer({ flow, target, stock, volume, duration, unit }: Drip
     figures.push(...used.figures)
     working.push(...used.lines)
   }
+  const byVolume = formalinCautions({ target, basis, form: 'liquid', strength: stock, strengthOf: basis })
   return ok({
     figures,
     working,
     ...(schedule ? { schedule } : {}),
-    cautions: [{ code: volume ? 'prime-whole' : 'not-primed', level: 'warning' }],
+    cautions: [{ code: volume ? 'prime-whole' : 'not-primed', level: 'warning' }, ...byVolume.cautions],
+    sources: byVolume.sources,
   })
 }
 

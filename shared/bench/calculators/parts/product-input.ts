@@ -35,6 +35,8 @@ export const productWords = {
   'help.share':
     'Only where the target is of one thing and the label of another: copper in its sulfate 25.45 %.',
   'input.density': 'Density of the product',
+  'refusal.share-missing':
+    'The target is of one substance and the label of another. Type the share of the target substance in what the label names, or give both of the same.',
 } as const
 
 export const basisInput = choice(['product', ...ofSubstance], { missing: 'basis-missing' })

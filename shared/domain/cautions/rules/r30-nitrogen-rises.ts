@@ -1,3 +1,4 @@
+import { harmfulNMgPerL } from '../../ammonia/unionised-ammonia.ts'
 import type { AgentCode } from '../../formulary/agent.ts'
 import type { TimedReading } from '../caution-facts.ts'
 import { readingOf } from '../caution-param.ts'
@@ -39,7 +40,7 @@ export const nitrogenRises = defineRule({
   parameters: {
     risesFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
     unionisedMgPerL: {
-      default: 0.05,
+      default: harmfulNMgPerL,
       unit: 'mg/L',
       source: 'treatment-practice',
       mark: 'M',
