@@ -94,6 +94,7 @@ export function compose(outside: Outside) {
   const permits = createPermits(register)
   const acquisitions = createAcquisitions({ ...register, permits: permits.service })
   const exports = createExports({ ...register, acquisitions })
+  const bench = createBench({ ...parts, facility: facility.service })
   const orders = createOrders({
     ...parts,
     facility: facility.service,
@@ -103,8 +104,13 @@ export function compose(outside: Outside) {
     animals,
     documents,
     treatments: quarantine.services.treatments,
+    askBench: bench.ask,
   })
-  const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
+  const audit = createAudit({
+    ...parts,
+    blindAmong: orders.queries.blindAmong,
+    benchLeftOutAmong: orders.queries.benchLeftOutAmong,
+  })
   const administrations = createAdministrations({
     ...parts,
     facility: facility.service,
@@ -114,7 +120,6 @@ export function compose(outside: Outside) {
     documents,
   })
   const handover = createHandover(parts)
-  const bench = createBench({ ...parts, facility: facility.service })
   const today = createToday({
     ...parts,
     facility: facility.service,

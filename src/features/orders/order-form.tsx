@@ -2,6 +2,7 @@ import { useMemo, useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link, useLocation, useNavigate } from 'react-router-dom'
 import { Save } from 'lucide-react'
+import type { BathOrderFields, BenchAsked, SaidBench } from '../../../shared/contracts/order-primitives.ts'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderListWords, orderViewWords } from '../../../shared/messages/orders-screens.ts'
@@ -144,7 +145,13 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
         />
         <div className="pane stack gap-4">
           {above}
-          {carried ? <CarriedIntoOrder carried={carried} /> : null}
+          <CarriedIntoOrder
+            bench={values.bench}
+            carried={carried}
+            said={judged?.bench ?? null}
+            withheld={opened?.benchWithheld ?? false}
+            onChange={(bench) => change({ bench })}
+          />
           {isProposal ? <p className="hint">{words.proposalNote}</p> : null}
           {stale && fields ? (
             <StaleChoice
@@ -152,6 +159,8 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
               mine={fields}
               known={{
                 zone,
+                bench: (asked) =>
+                  sayBench(asked, [theirs.draftBench, judged?.bench ?? null], [theirs.draft, fields]),
                 products: formulary?.products ?? [],
                 animals: new Map(judged?.water.animals.map((animal) => [animal.animalId, animal.accession])),
               }}
@@ -247,4 +256,15 @@ function startOf(opened: Order | null, zone: string, carried: CarryTo<'order'> |
   const fields = opened?.draft ?? signed?.fields ?? null
   if (fields) return valuesOf(fields, zone)
   return carried ? carriedOrder(carried) : emptyOrder()
+}
+
+/** A question to the bench, as the server said the one of them that it is. */
+function sayBench(
+  asked: BenchAsked,
+  said: readonly (SaidBench | null)[],
+  of: readonly (BathOrderFields | null)[],
+): string {
+  const at = of.findIndex((fields) => JSON.stringify(fields?.bench) === JSON.stringify(asked))
+  const found = said[at]
+  return found ? `${found.head}. ${found.inputs.join('; ')}` : asked.calculator
 }
