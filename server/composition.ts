@@ -103,6 +103,7 @@ export function compose(outside: Outside) {
     water,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
     askBench: bench.ask,
   })
@@ -118,6 +119,7 @@ export function compose(outside: Outside) {
     orders,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
   })
   const handover = createHandover(parts)
   const today = createToday({

@@ -18,6 +18,7 @@ import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
+import { checkBlock } from '../../platform/pdf/check-block.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
 import { bathBlocks, calculationBlocks } from './bath-paper-records.ts'
@@ -32,6 +33,7 @@ export interface BathPaper {
   /** A state of the order that no page may hide; null when doses may be given from it. */
   notice: string | null
   facility: string
+  publicUrl: string
   paper: 'a4' | 'letter'
   printedBy: string
   printedAt: string
@@ -266,7 +268,7 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           ...sheet.overrides.map(({ signature }) => signatureEntry(signature)),
         ],
       },
-      { kind: 'fingerprint', label: bathPaper.fingerprint, fingerprint: block.hash },
+      checkBlock(paper.publicUrl, block.hash, bathPaper.fingerprint),
       standingCaution(),
     ],
   }

@@ -20,6 +20,7 @@ export interface SheetPrintParts {
   pdf: PdfPool
   facility: FacilityService
   documents: DocumentsService
+  publicUrl: string
   sheetFor(
     context: RequestContext,
     number: string,
@@ -42,6 +43,7 @@ export function createSheetPrinter(parts: SheetPrintParts) {
       notice: orderNotice({ block, row, superseded: false, versionNo: content.versionNo }),
       facility: await parts.facility.valueOf('facility.name'),
       paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      publicUrl: parts.publicUrl,
       printedBy: context.actor.printedName,
       printedAt,
     })

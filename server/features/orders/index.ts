@@ -31,6 +31,7 @@ import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
 import { createOrdersService } from './orders.service.ts'
 import { createOrderPrinter, orderPrintKind } from './print-order.ts'
+import { createLabelPrinter, labelPrintKind } from './print-label.ts'
 import { answerForOrderPrints } from './print-state.ts'
 
 export { readKnown } from './knowers.reads.ts'
@@ -59,6 +60,8 @@ export interface OrdersOutside extends Parts {
   animals: Animals
   documents: Documents
   pdf: PdfPool
+  /** Where people reach this installation, for codes on paper. */
+  publicUrl: string
   treatments: TreatmentsService
   /** Asks a calculator of the bench. */
   askBench: AskBench
@@ -93,8 +96,10 @@ export function createOrders(parts: OrdersOutside) {
   const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
   const noteAmountsPreviewed = createAmountsPreviewed({ ...parts, noteAmountsSeen })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
+  const printLabel = createLabelPrinter({ ...parts, documents: documents.service, queries })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)
+  documents.prints.answerFor(labelPrintKind, answerForPrint)
   parts.animals.amounts.askOf(queries.blindAmong)
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
   const judge = (
@@ -124,6 +129,7 @@ export function createOrders(parts: OrdersOutside) {
       noteAmountsSeen,
       noteAmountsPreviewed,
       print,
+      printLabel,
     }),
   }
 }

@@ -18,6 +18,7 @@ import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderBenchWords, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { checkBlock } from '../../platform/pdf/check-block.ts'
 import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
@@ -35,6 +36,7 @@ export interface OrderPaper {
   recorded: readonly RecordedDoseRow[]
   superseded: boolean
   facility: string
+  publicUrl: string
   paper: 'a4' | 'letter'
   printedBy: string
   printedAt: string
@@ -361,7 +363,7 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
       ...faultBlocks(paper),
       ...(isTextSound(block.fault) ? statements(paper) : faultyStatements(paper)),
       { kind: 'signatures', entries: [signatureEntry(block)] },
-      { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
+      checkBlock(paper.publicUrl, block.hash),
       standingCaution(),
     ],
   }

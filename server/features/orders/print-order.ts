@@ -20,6 +20,7 @@ export interface PrintParts {
   documents: DocumentsService
   queries: OrderQueries
   noteAmountsSeen: NoteAmountsSeen
+  publicUrl: string
 }
 
 /** Prints a signed version: checked now, noted with its fingerprint so that the paper can be looked up again. */
@@ -39,6 +40,7 @@ export function createOrderPrinter(parts: PrintParts) {
       superseded: sealed.superseded,
       facility: await parts.facility.valueOf('facility.name'),
       paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      publicUrl: parts.publicUrl,
       printedBy: actor.printedName,
       printedAt: parts.clock.now().toISOString(),
     })

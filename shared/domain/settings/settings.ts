@@ -24,6 +24,12 @@ export const settings = {
     confirm: 'facility.manage',
     source: 'project-default',
   },
+  'facility.address': {
+    default: '',
+    kind: 'text',
+    confirm: 'facility.manage',
+    source: 'project-default',
+  },
   'facility.zone': { default: 'UTC', kind: 'zone', confirm: 'facility.manage', source: 'project-default' },
   'facility.jurisdictions': {
     default: '',
