@@ -42,7 +42,7 @@ export function createSheetPrinter(parts: SheetPrintParts) {
       block,
       notice: orderNotice({ block, row, superseded: false, versionNo: content.versionNo }),
       facility: await parts.facility.valueOf('facility.name'),
-      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await parts.facility.paper(),
       publicUrl: parts.publicUrl,
       printedBy: context.actor.printedName,
       printedAt,

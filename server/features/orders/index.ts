@@ -6,6 +6,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Animals } from '../animals/index.ts'
+import type { Cautions } from '../cautions/index.ts'
 import type { Documents } from '../documents/index.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -56,6 +57,7 @@ export interface OrdersOutside extends Parts {
   facility: FacilityService
   signing: SigningService
   formulary: Formulary
+  cautions: Cautions
   water: Water
   animals: Animals
   documents: Documents
@@ -80,6 +82,7 @@ export function createOrders(parts: OrdersOutside) {
   const situation = {
     dataSource,
     facts,
+    settingsAt: parts.cautions.settingsAt,
     product: (id: string) => formulary.queries.product(id),
     doseLine: (id: string) => formulary.queries.doseLine(id),
     doseLinesOf: (agent: AgentCode) => formulary.queries.doseLinesOf(agent),

@@ -1,14 +1,12 @@
 import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
-import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
-import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { labelPaper as words } from '../../../shared/messages/order-label.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
-import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
-import { signerLine } from '../../platform/pdf/signature-entry.ts'
+import { signedFrame } from '../../platform/pdf/signed-frame.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { orderNotice } from './order-document.ts'
 import type { OrderPaper } from './order-document.ts'
@@ -124,12 +122,10 @@ function cautions({ content }: LabelPaper): DocumentBlock[] {
  */
 export function orderLabelDocument(paper: LabelPaper): PdfDocumentModel {
   const { content, block } = paper
-  const short = formatFingerprint(block.hash)
   const notice = orderNotice({ ...paper, versionNo: content.versionNo })
   return {
     title: words.title({ number: content.number, n: content.versionNo }),
-    language: 'en',
-    paper: paper.paper,
+    ...signedFrame(paper, notice),
     head: {
       facility: paper.facility,
       name: words.name,
@@ -137,15 +133,6 @@ export function orderLabelDocument(paper: LabelPaper): PdfDocumentModel {
       version: orderPaper.version({ n: content.versionNo }),
       source: words.source,
       subject: { name: content.enclosure.code, lines: [content.enclosure.name] },
-    },
-    signers: [signerLine(block)],
-    ...(short.ok ? { recordCheck: short.value } : {}),
-    ...(notice === null ? {} : { notice }),
-    printed: {
-      by: paper.printedBy,
-      at: sayInstantWithOffset(paper.printedAt, block.zone),
-      atIso: paper.printedAt,
-      note: documentWords.laterVersion,
     },
     blocks: [
       ...contents(paper),

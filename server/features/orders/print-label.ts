@@ -25,7 +25,7 @@ export function createLabelPrinter(parts: Omit<PrintParts, 'noteAmountsSeen'>) {
       address: drawable(await parts.facility.valueOf('facility.address')),
       facility: await parts.facility.valueOf('facility.name'),
       publicUrl: parts.publicUrl,
-      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await parts.facility.paper(),
       printedBy: context.actor.printedName,
       printedAt: parts.clock.now().toISOString(),
     })

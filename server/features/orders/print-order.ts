@@ -39,7 +39,7 @@ export function createOrderPrinter(parts: PrintParts) {
       recorded: sealed.recorded,
       superseded: sealed.superseded,
       facility: await parts.facility.valueOf('facility.name'),
-      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await parts.facility.paper(),
       publicUrl: parts.publicUrl,
       printedBy: actor.printedName,
       printedAt: parts.clock.now().toISOString(),

@@ -6,7 +6,7 @@ const digitsThatName = 16
 const sideMm = 22
 
 /** The address at which anybody signed in sees whether a print is still to be acted on. */
-export const checkAddress = (publicUrl: string, hash: string): string =>
+const checkAddress = (publicUrl: string, hash: string): string =>
   `${publicUrl.replace(/\/+$/, '')}/check/${hash.slice(0, digitsThatName)}`
 
 /** The fingerprint in full beside a code to scan: whether this paper is still current. */
@@ -15,14 +15,13 @@ export function checkBlock(
   hash: string,
   label: string = documentWords.fingerprintInFull,
 ): DocumentBlock {
+  const address = checkAddress(publicUrl, hash)
   return {
     kind: 'columns',
     columns: [
       {
         share: 1,
-        blocks: [
-          { kind: 'qr', text: checkAddress(publicUrl, hash), sideMm, caption: documentWords.scanToCheck },
-        ],
+        blocks: [{ kind: 'qr', text: address, sideMm, caption: documentWords.scanToCheck }],
       },
       {
         share: 3,
@@ -31,7 +30,7 @@ export function checkBlock(
             kind: 'fingerprint',
             label,
             fingerprint: hash,
-            lookUp: documentWords.lookUp({ address: checkAddress(publicUrl, hash) }),
+            lookUp: documentWords.lookUp({ address }),
           },
         ],
       },

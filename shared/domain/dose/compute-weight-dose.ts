@@ -1,16 +1,17 @@
 import { ok, refuse, type Result } from '../result.ts'
 import { concentrationBases } from '../units/basis.ts'
-import { parseQuantity, type ParsedQuantity } from '../units/parse-quantity.ts'
+import { parseQuantity } from '../units/parse-quantity.ts'
 import { enteredTerm } from '../working/entered-term.ts'
 import { valueTerm } from '../working/value-term.ts'
 import type { WorkingLine } from '../working/working-line.ts'
 import { productForMass } from './amount-from-mass.ts'
+import { productByMass } from './amount-from-product.ts'
 import type { Amount } from './amount-from-product.ts'
 import type { BathProduct } from './bath-product.ts'
 import { doseLimits } from './dose-limits.ts'
 import type { DoseRefusal } from './dose-refusal.ts'
 import { measureForAnimal } from './measure-for-animal.ts'
-import { readDensity } from './read-density.ts'
+import { targetTerm } from './rise-needed.ts'
 import type { WeightDose, WeightDoseInput } from './weight-dose.ts'
 
 /**
@@ -45,7 +46,7 @@ export function computeWeightDose(input: WeightDoseInput): Result<WeightDose, Do
     key: 'drug-for-weight',
     code: 'drug-for-weight',
     params: {},
-    expression: `${doseTerm(dose.value)} * ${enteredTerm(weight.value)} to mg`,
+    expression: `${targetTerm(dose.value)} * ${enteredTerm(weight.value)} to mg`,
     value: (dose.value.value * weight.value.value) / gramsPerKilogram,
     unit: 'mg',
     rests: [],
@@ -68,34 +69,11 @@ export function computeWeightDose(input: WeightDoseInput): Result<WeightDose, Do
 
 const gramsPerKilogram = 1000
 
-/** A dose is written without trailing zeros, also in the working: 0.40 mg/kg is 0.4 mg/kg. */
-function doseTerm(dose: ParsedQuantity<'bodyDose'>): string {
-  const value = dose.entered.value.replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '')
-  return enteredTerm({ ...dose, entered: { ...dose.entered, value } })
-}
-
 /** A dose of the product itself: weighed as it is, or by its density. */
 function amountOfProduct(drug: WorkingLine, product: BathProduct): Result<Amount, DoseRefusal> {
-  const grams = drug.value / 1000
-  const massKey = product.form === 'solid' ? 'amount' : 'product-mass'
-  const mass: WorkingLine = {
-    key: massKey,
-    code: 'product-mass',
-    params: {},
-    expression: `${valueTerm(drug.value, 'mg')} to g`,
-    value: grams,
-    unit: 'g',
-    rests: [drug.key],
-  }
-  if (product.form === 'solid') return ok({ value: grams, unit: 'g', lines: [drug, mass] })
-  const density = readDensity(product)
-  if (!density.ok) return density
-  const value = grams / density.value.value
-  const expression = `${valueTerm(grams, 'g')} / (${enteredTerm(density.value)}) to mL`
-  const last = { key: 'amount', code: 'product-volume-from-mass' as const, params: {}, expression, value }
-  return ok({
-    value,
-    unit: 'mL',
-    lines: [drug, mass, { ...last, unit: 'mL', rests: [massKey] }],
-  })
+  const amount = productByMass(
+    { grams: drug.value / 1000, expression: `${valueTerm(drug.value, 'mg')} to g`, rests: [drug.key] },
+    product,
+  )
+  return amount.ok ? ok({ ...amount.value, lines: [drug, ...amount.value.lines] }) : amount
 }

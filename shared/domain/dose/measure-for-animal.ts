@@ -1,5 +1,6 @@
 import { dilutionFor, injectionSites } from '../injection/injection-volume.ts'
 import { decimalOf, decimalText } from '../quantities/decimal.ts'
+import { roundingErrorPercent } from '../quantities/rounding-error.ts'
 import { roundToDivision } from '../quantities/round-to-division.ts'
 import { ok, refuse, type Result } from '../result.ts'
 import { convert } from '../units/convert.ts'
@@ -11,9 +12,6 @@ import type { DoseRefusal } from './dose-refusal.ts'
 import type { WeightDose } from './weight-dose.ts'
 
 type Measured = Pick<WeightDose, 'measured' | 'roundingPercent' | 'thinTo' | 'portions'>
-
-/** Nearer than this the rounding is of the binary form alone. */
-const leastErrorPercent = 1e-9
 
 /**
  * An amount for one animal as a syringe or a balance can take it, in the unit of its division, halves up, and divided
@@ -45,7 +43,6 @@ export function measureForAnimal(
   const thinTo = thin.ok && thin.value > 1 ? thin.value : undefined
   if (Number(rounded.value) === 0)
     return refuse('below-half-step', 'division', thinTo === undefined ? {} : { parts: thinTo })
-  const error = 100 * (Number(rounded.value) / there.value - 1)
   const portions =
     mostPerPlace === undefined || unit === 'g'
       ? ok(undefined)
@@ -53,7 +50,7 @@ export function measureForAnimal(
   if (!portions.ok) return portions
   return ok({
     measured: { value: rounded.value, unit: entered.unit },
-    roundingPercent: Math.abs(error) < leastErrorPercent ? 0 : error,
+    roundingPercent: roundingErrorPercent(Number(rounded.value), there.value),
     ...(thinTo === undefined ? {} : { thinTo }),
     ...(portions.value === undefined ? {} : { portions: portions.value }),
   })

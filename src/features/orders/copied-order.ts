@@ -3,8 +3,8 @@ import type { BathOrderFields } from '../../../shared/contracts/order-primitives
 import { emptyOrder, valuesOf } from './order-form-model.ts'
 import type { OrderValues } from './order-form-model.ts'
 
-/** What was ordered then: the draft where one stands, else the signed text; null where that is not what was signed. */
-export function fieldsToCopy(order: Order): BathOrderFields | null {
+/** What an order says: the draft where one stands, else the signed text; null where that is not what was signed. */
+export function fieldsOfOrder(order: Order): BathOrderFields | null {
   const signed = order.versions[0]?.content as { fields?: BathOrderFields } | null | undefined
   return order.draft ?? signed?.fields ?? null
 }

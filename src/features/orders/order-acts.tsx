@@ -17,7 +17,7 @@ import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
-import { fieldsToCopy } from './copied-order.ts'
+import { fieldsOfOrder } from './copied-order.ts'
 import { useDiscontinue, useLiftHold } from './mutations.ts'
 import { labelAddress, printAddress } from './queries.ts'
 
@@ -76,9 +76,9 @@ export function OrderActs({ order, version }: { order: Order; version: number })
 }
 
 /** A new order that begins as this one; nothing of this one changes. */
-export function CopyOrder({ order }: { order: Order }) {
+function CopyOrder({ order }: { order: Order }) {
   const draft = useMay('order.draft')
-  if (fieldsToCopy(order) === null) return null
+  if (fieldsOfOrder(order) === null) return null
   return draft.allowed ? (
     <ButtonLink icon={Copy} to={paths.copyOrder(order.number)}>
       {words.copy}

@@ -25,7 +25,7 @@ import { formularyQuery } from '../formulary/index.ts'
 import { answersToSend, noAnswers, whyNotSign } from './answers-model.ts'
 import type { Answers } from './answers-model.ts'
 import { CarriedIntoOrder } from './carried-order.tsx'
-import { copiedOrder, fieldsToCopy } from './copied-order.ts'
+import { copiedOrder, fieldsOfOrder } from './copied-order.ts'
 import { CourseFields } from './course-fields.tsx'
 import { JudgedCautions } from './judged-cautions.tsx'
 import { OrderFields } from './order-fields.tsx'
@@ -273,10 +273,9 @@ function startOf({
   zone: string
   carried: CarryTo<'order'> | null
 }): OrderValues {
-  const signed = opened?.versions[0]?.content as { fields?: Order['draft'] } | undefined
-  const fields = opened?.draft ?? signed?.fields ?? null
+  const fields = opened && fieldsOfOrder(opened)
   if (fields) return valuesOf(fields, zone)
-  const earlier = copied && fieldsToCopy(copied)
+  const earlier = copied && fieldsOfOrder(copied)
   if (earlier) return copiedOrder(earlier, zone)
   return carried ? carriedOrder(carried) : emptyOrder()
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
-import { copiedOrder, fieldsToCopy } from '../../../src/features/orders/copied-order.ts'
+import { copiedOrder, fieldsOfOrder } from '../../../src/features/orders/copied-order.ts'
 import { emptyOrder, fieldsOf } from '../../../src/features/orders/order-form-model.ts'
 import { newId } from '../../../src/lib/new-id.ts'
 
@@ -67,9 +67,9 @@ describe('an order that begins as an earlier one', () => {
     const order = (draft: BathOrderFields | null, content: unknown) =>
       ({ draft, versions: content === undefined ? [] : [{ content }] }) as unknown as Order
     const other = { ...fields, problem: 'Other' }
-    expect(fieldsToCopy(order(other, { fields }))).toBe(other)
-    expect(fieldsToCopy(order(null, { fields }))).toBe(fields)
-    expect(fieldsToCopy(order(null, null))).toBeNull()
-    expect(fieldsToCopy(order(null, undefined))).toBeNull()
+    expect(fieldsOfOrder(order(other, { fields }))).toBe(other)
+    expect(fieldsOfOrder(order(null, { fields }))).toBe(fields)
+    expect(fieldsOfOrder(order(null, null))).toBeNull()
+    expect(fieldsOfOrder(order(null, undefined))).toBeNull()
   })
 })

@@ -5,6 +5,7 @@ import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
 import { computeWeightDose } from '../../../shared/domain/dose/compute-weight-dose.ts'
 import { doseOfAmount } from '../../../shared/domain/dose/dose-of-amount.ts'
 import type { WeightDose, WeightDoseInput } from '../../../shared/domain/dose/weight-dose.ts'
+import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 
 const q = (value: string, unit: Quantity['unit']): Quantity => ({ value, unit })
@@ -147,7 +148,8 @@ describe('a dose for the weight of an animal', () => {
           const back = doseOfAmount({
             ...input,
             basis,
-            amount: q(there.amount.toFixed(12).replace(/0+$/, '0'), 'mL'),
+            // every digit of it: the smallest amounts here are less than a millionth of a millilitre
+            amount: quantityOf(there.amount, 'mL'),
           })
           if (!back.ok) throw new Error(JSON.stringify(back.refusal))
           expect(back.value.mgPerKg / (dose / 100)).toBeCloseTo(1, 4)
