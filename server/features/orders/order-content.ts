@@ -57,6 +57,8 @@ export interface SignedOrder {
   conditions: ReturnType<typeof saidCondition>[]
   overrides: (SignedAnswer & { reason: string })[]
   read: (string | SignedAnswer)[]
+  /** As it was read by the signer; absent in orders signed before it was asked for, null where the use is by the label. */
+  relationship?: string | null
   /** The facility's thresholds that the cautions were judged by; orders signed earlier were judged by the defaults. */
   settings?: CautionSettings
   facts: Json
@@ -73,6 +75,7 @@ export interface ContentRequest {
   bench: SaidBench | null
   overrides: Override[]
   read: AnsweredCaution[]
+  relationship: string | null
 }
 
 /** Puts the content of a signature together. */
@@ -124,6 +127,7 @@ export function contentOf(request: ContentRequest): SignedOrder {
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,
     read: request.read,
+    relationship: request.relationship,
     settings: found.settings,
     facts: JSON.parse(JSON.stringify(judgement?.facts ?? null)) as Json,
   }

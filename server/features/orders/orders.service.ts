@@ -1,7 +1,7 @@
 import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
-import { orderProblemWords, orderWords } from '../../../shared/messages/orders.ts'
+import { orderProblemWords, orderWords, relationshipWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
@@ -49,6 +49,7 @@ export interface SignRequest {
   expectedVersion: number
   read: AnsweredCaution[]
   overrides: Override[]
+  relationship?: boolean | undefined
 }
 
 const subject = (order: Pick<OrderHead, 'id' | 'number'>) => ({
@@ -216,6 +217,9 @@ export function createOrdersService(parts: OrdersParts) {
         const bench = await saidBench(parts.askBench, fields, found.judgement?.dose ?? null)
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
+        const isExtralabel = fields.use === 'extralabel'
+        if (isExtralabel && request.relationship !== true)
+          throw refusedInput('/relationship', relationshipWords.needed, 'relationship-not-stated')
         const volume = situation.water.volume
         if (product && fields.lotId !== null && !product.lots.some(({ id }) => id === fields.lotId))
           throw refusedInput('/fields/lotId', orderWords.lotOfOther, 'lot-of-other-product')
@@ -243,6 +247,7 @@ export function createOrdersService(parts: OrdersParts) {
           bench,
           overrides: request.overrides,
           read: request.read,
+          relationship: isExtralabel ? relationshipWords.statement : null,
         })
         const sealed = await parts.signing.seal(tx, {
           signatory,
