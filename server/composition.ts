@@ -96,6 +96,7 @@ export function compose(outside: Outside) {
   const permits = createPermits(register)
   const acquisitions = createAcquisitions({ ...register, permits: permits.service })
   const exports = createExports({ ...register, acquisitions })
+  const bench = createBench({ ...parts, facility: facility.service })
   const orders = createOrders({
     ...parts,
     facility: facility.service,
@@ -107,8 +108,13 @@ export function compose(outside: Outside) {
     documents,
     publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
+    askBench: bench.ask,
   })
-  const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
+  const audit = createAudit({
+    ...parts,
+    blindAmong: orders.queries.blindAmong,
+    benchLeftOutAmong: orders.queries.benchLeftOutAmong,
+  })
   const administrations = createAdministrations({
     ...parts,
     facility: facility.service,
@@ -119,7 +125,6 @@ export function compose(outside: Outside) {
     publicUrl: outside.publicUrl ?? '',
   })
   const handover = createHandover(parts)
-  const bench = createBench({ ...parts, facility: facility.service })
   const today = createToday({
     ...parts,
     facility: facility.service,

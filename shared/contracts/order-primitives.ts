@@ -31,6 +31,33 @@ export const Stated = z
   })
   .describe('Facts that no ledger holds, stated on the form')
 
+const mostInputs = 40
+const BenchInput = z.union([
+  z.string().max(200),
+  z.number(),
+  z.strictObject({
+    value: z.union([z.string().max(60), z.number()]).describe('The number, as digits or as a number'),
+    unit: z.string().max(40).describe('Its unit'),
+  }),
+])
+
+/** A question to a calculator of the bench. Its answer is never taken from outside: the server asks again. */
+export const BenchAsked = z
+  .strictObject({
+    calculator: z
+      .string()
+      .regex(/^[a-z0-9-]{1,60}$/)
+      .describe('Which calculator, by its name at /api/bench'),
+    inputs: z
+      .record(z.string().max(60), BenchInput)
+      .refine((inputs) => Object.keys(inputs).length <= mostInputs, {
+        error: `At most ${String(mostInputs)} inputs.`,
+      })
+      .describe('What it was asked, as its own address takes it'),
+  })
+  .describe('A question to a calculator of the bench')
+export type BenchAsked = z.infer<typeof BenchAsked>
+
 /** An order for an immersion bath as it is being written; choices that attest are null until somebody makes them. */
 export const BathOrderFields = z
   .strictObject({
@@ -63,6 +90,11 @@ export const BathOrderFields = z
       .max(50)
       .describe('How far the volume may have moved since the signature, in percent'),
     stated: Stated,
+    bench: BenchAsked.nullable()
+      .optional()
+      .describe(
+        'What was asked on the bench beforehand; null: nothing; left out: what is kept with the order stays',
+      ),
   })
   .describe('An order for a bath')
 export type BathOrderFields = z.infer<typeof BathOrderFields>
@@ -97,6 +129,19 @@ export const SaidCondition = z.object({
   state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands by the facts at hand'),
   secondCalculation: z.boolean().describe('It asks for a second calculation'),
 })
+
+/** What a calculator of the bench says to what was asked before the order was written. Never the order's own amount. */
+export const SaidBench = z.object({
+  head: z.string().describe('The calculator and its result'),
+  inputs: z.array(z.string()).describe('What it was asked, line by line'),
+  working: z.array(z.string()).describe('Its working, line by line'),
+  sources: z.array(z.string()).describe('The works that it rests on, with marks'),
+  comparison: z
+    .string()
+    .nullable()
+    .describe('How it stands to the amount of the order; null where the two cannot be compared'),
+})
+export type SaidBench = z.infer<typeof SaidBench>
 
 export const OrderAmount = z.object({
   unrounded: z.number().describe('Amount as worked out, in g or mL as the unit says'),

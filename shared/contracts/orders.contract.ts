@@ -6,6 +6,7 @@ import {
   OrderAmount,
   OrderNumber,
   OrderWater,
+  SaidBench,
   SaidCaution,
   SaidCondition,
   SaidLine,
@@ -29,6 +30,9 @@ export const OrderPreview = z.object({
   cautions: z.array(SaidCaution).describe('Cautions, the gravest first'),
   conditions: z.array(SaidCondition).describe('What has to be true before each dose'),
   missing: z.array(z.string()).describe('Fields that have to be filled before signing'),
+  bench: SaidBench.nullable().describe(
+    'What was worked out beforehand on the bench, worked out again; null without one, or while it is left out',
+  ),
 })
 export type OrderPreview = z.infer<typeof OrderPreview>
 
@@ -118,6 +122,10 @@ export const Order = OrderRow.extend({
     .describe('The amount and its working are left out: the person who asks may be the blind second person'),
   version: z.int().describe('Version for saving the draft'),
   draft: BathOrderFields.nullable().describe('The draft, where there is one'),
+  draftBench: SaidBench.nullable().describe('What the draft took over from the bench, worked out again'),
+  benchWithheld: z
+    .boolean()
+    .describe('A working of the bench is kept with it and left out for the person who asks'),
   createdBy: z.string().describe('Who wrote it first'),
   createdAt: Instant.describe('When it was written first'),
   versions: z.array(SignedVersion).describe('Signed versions, the newest first'),

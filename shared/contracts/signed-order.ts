@@ -3,6 +3,7 @@ import {
   BathOrderFields,
   OrderAmount,
   OrderWater,
+  SaidBench,
   SaidCaution,
   SaidCondition,
   SaidLine,
@@ -45,6 +46,9 @@ export const SignedBathOrder = z.object({
     'Amount of each dose; left out for whoever may be the blind second person',
   ),
   working: z.array(SaidLine).describe('Working of the amount'),
+  bench: SaidBench.nullable()
+    .optional()
+    .describe('What was worked out beforehand on the bench, as it was said at signing'),
   cautions: z.array(SaidCaution).describe('Cautions at signing'),
   conditions: z.array(SaidCondition).describe('What has to be true before each dose'),
   overrides: z

@@ -16,6 +16,7 @@ export const benchCarryWords = defineMessages({
   grounds: 'What was asked on the bench, and its working',
   asked: 'Asked',
   working: 'Working',
+  sources: 'Sources',
   line: (p: { what: string; text: string }) => `${p.what}: ${p.text}`,
   lineFrom: (p: { what: string; text: string; from: string }) => `${p.what}: ${p.text} (${p.from})`,
   step: (p: { what: string; formula: string; result: string }) => `${p.what}: ${p.formula} = ${p.result}`,
@@ -24,9 +25,9 @@ export const benchCarryWords = defineMessages({
   noteTooLong: 'The working was too long for this note.',
 
   inOrder: (p: { fields: string }) =>
-    `Filled in from it: ${p.fields}. The order works the amount out anew, from its product and the confirmed volume; the bench’s own figure, strength and volume are not kept with it.`,
+    `Filled in from it: ${p.fields}. The order works the amount out anew, from its product and the confirmed volume; what was asked on the bench and its working are kept beside it.`,
   inOrderNothing:
-    'Nothing on this form could be filled in from it. The order works the amount out by itself; the bench’s figure is not kept with it.',
+    'Nothing on this form could be filled in from it. The order works the amount out by itself; what was asked on the bench and its working are kept beside it.',
   inVolume:
     'Filled in from it; the volume is worked out anew as it is recorded, and counts once another person has confirmed it. Errors that were not stated on the bench are left open.',
   inVolumeStated:

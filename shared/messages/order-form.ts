@@ -56,6 +56,13 @@ export const orderFormWords = defineMessages({
   setting: 'Where the water is',
   division: 'Balance or measure reads to',
   divisionHint: 'Its smallest step: the amount is rounded to it',
+  bench: 'From the bench',
+  benchKept: 'It is kept with the order, beside the amount and never in its place.',
+  benchNotShown:
+    'A working of the bench is kept with this order. It is shown once the drug, the water and the target give an amount; whoever has seen it can’t be the second person.',
+  benchLeave: 'Leave the bench’s working out of this order',
+  benchLeft: 'The bench’s working is left out of this order.',
+  benchBack: 'Put it back',
   use: 'Use',
   asLabelled: 'As labelled',
   extralabel: 'Extralabel',

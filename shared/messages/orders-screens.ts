@@ -135,6 +135,8 @@ export const orderViewWords = defineMessages({
   cautionsAtSigning: 'as they stood at the signature',
   noCautions: 'No caution fired.',
   secondPerson: 'Asks for a second calculation by another person.',
+  benchWithheld:
+    'What was worked out on the bench beforehand is kept with it. It is not shown to whoever may have to work the amount out as the second person.',
   amountWithheld:
     'The amount is left out here: another person than the first works it out blind before each dose of this drug in this water, and that may be you. Whoever looks at it is remembered.',
   showAmount: 'I do not calculate second: show the amount',

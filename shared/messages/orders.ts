@@ -81,6 +81,24 @@ export const orderProblemWords = defineMessages({
     'Nothing was signed. An answer belongs to no caution that stands now. Read the cautions as they are now, answer those, and sign again.',
 })
 
+/** Words of what an order keeps from the bench. */
+export const orderBenchWords = defineMessages({
+  head: (p: { name: string; result: string }) => `${p.name}: ${p.result}`,
+  source: (p: { citation: string; mark: string }) => `${p.citation} (${p.mark})`,
+  same: (p: { own: string; bench: string }) =>
+    `The order’s own amount is ${p.own}; the bench came to ${p.bench}. They are the same.`,
+  differs: (p: { own: string; bench: string }) =>
+    `The order’s own amount is ${p.own}; the bench came to ${p.bench}. They differ. The order’s own counts: it rests on its product, its target and the confirmed volume.`,
+  refused: (p: { why: string }) =>
+    `What was asked on the bench cannot be worked out again: ${p.why} Leave the bench’s working out of this order, or work it out anew on the bench.`,
+  unknown: 'there is no such calculator.',
+  heading: 'Worked out beforehand on the bench',
+  notTheAmount: 'Not the amount of this order, which is worked out above.',
+  inputs: (p: { inputs: string }) => `Asked: ${p.inputs}.`,
+  working: (p: { lines: string }) => `Working: ${p.lines}.`,
+  sources: (p: { sources: string }) => `Sources: ${p.sources}`,
+})
+
 export const volumeMethods = defineMessages({
   geometry: 'worked out from measurements',
   metered: 'metered',

@@ -1,6 +1,7 @@
 import { useState } from 'react'
 import { useLocation } from 'react-router-dom'
 import { z } from 'zod'
+import { BenchAsked } from '../../shared/contracts/order-primitives.ts'
 import { EnteredQuantity } from '../../shared/contracts/primitives.ts'
 import { VolumeSheetBody } from '../../shared/contracts/volume-sheet.ts'
 import { readingParameters } from '../../shared/domain/readings/parameters.ts'
@@ -20,6 +21,7 @@ const Carried = z.discriminatedUnion('to', [
   z.strictObject({
     to: z.literal('order'),
     said: Said,
+    bench: BenchAsked.nullable(),
     enclosureId: z.string().nullable(),
     target: EnteredQuantity.nullable(),
     basis: z.enum(concentrationBases).nullable(),

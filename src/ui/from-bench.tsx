@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import { benchCarryWords as words } from '../../shared/messages/bench-carry.ts'
 
 /** On a form: what was carried into it from the bench, with everything that it rests on. */
@@ -6,12 +7,17 @@ export function FromBench({
   says,
   inputs,
   working,
+  sources = [],
+  children,
 }: {
   head: string
   /** What became of it here. */
   says: string
   inputs: readonly string[]
   working: readonly string[]
+  sources?: readonly string[]
+  /** What may be done with it. */
+  children?: ReactNode
 }) {
   return (
     <section className="from-bench" aria-label={words.heading}>
@@ -22,7 +28,9 @@ export function FromBench({
         <summary>{words.grounds}</summary>
         <Lines title={words.asked} lines={inputs} />
         <Lines title={words.working} lines={working} />
+        {sources.length > 0 ? <Lines title={words.sources} lines={sources} /> : null}
       </details>
+      {children}
     </section>
   )
 }

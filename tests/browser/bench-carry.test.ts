@@ -105,7 +105,7 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     expect(await field(page, 'Target').inputValue()).toBe('0.2')
     expect(await page.getByLabel('Target is counted', { exact: true }).inputValue()).toBe('free')
     expect(await field(page, 'Balance or measure reads to').inputValue()).toBe('0.01')
-    await fromBench(page).getByText('What was asked on the bench').click()
+    await fromBench(page).getByText('What was asked on the bench, and its working').click()
     await fromBench(page)
       .getByText(/Net volume of the water: 2,181\.4\sL \(QT-7: .* found 30\sNov\s2026, 10:00, UTC−4/)
       .waitFor()

@@ -8,6 +8,8 @@ export interface LeftOut {
   clinical: boolean
   /** The amount of a dose: they may still calculate one of its order blind. */
   amount: boolean
+  /** What was asked on the bench: the amount can be had from it. */
+  bench: boolean
 }
 
 /** Entries of doses: what was worked out, given, recorded, struck out. */
@@ -23,19 +25,26 @@ export function orderNamedBy(row: AuditRow): string | null {
   return typeof order === 'string' ? order : null
 }
 
+/** The order that an entry keeps a draft of. */
+export const orderDraftedBy = ({ subject_kind, action, subject_label }: AuditRow): string | null =>
+  subject_kind === 'order' && (action === 'order.draft' || action === 'order.revise-draft')
+    ? subject_label
+    : null
+
 type Facts = Record<string, unknown>
 const amounts = ['amount', ...amountFacts]
 
-function withoutAmount(said: unknown): unknown {
+function without(names: readonly string[], said: unknown): unknown {
   if (typeof said !== 'object' || said === null) return said ?? null
-  return Object.fromEntries(Object.entries(said).filter(([name]) => !amounts.includes(name)))
+  return Object.fromEntries(Object.entries(said).filter(([name]) => !names.includes(name)))
 }
 
 /** An entry as the reader may see it. */
 export function presentAuditEntry(row: AuditRow, leftOut: LeftOut): AuditEntry {
   const said = JSON.parse(row.text) as { before?: unknown; after?: unknown }
   const withheld = row.clinical && leftOut.clinical
-  const shown = leftOut.amount ? withoutAmount : (part: unknown) => part ?? null
+  const names = [...(leftOut.amount ? amounts : []), ...(leftOut.bench ? ['bench'] : [])]
+  const shown = (part: unknown) => without(names, part)
   return {
     seq: Number(row.seq),
     at: row.happened_at.toISOString(),
@@ -44,7 +53,7 @@ export function presentAuditEntry(row: AuditRow, leftOut: LeftOut): AuditEntry {
     subjectKind: row.subject_kind,
     subjectLabel: row.subject_label,
     withheld,
-    amountLeftOut: leftOut.amount && !withheld,
+    amountLeftOut: (leftOut.amount || leftOut.bench) && !withheld,
     before: withheld ? null : shown(said.before),
     after: withheld ? null : shown(said.after),
     hash: row.hash,

@@ -4,7 +4,7 @@ import { decide } from '../../../shared/domain/permissions/decide.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
-import { orderNamedBy, presentAuditEntry } from './audit.present.ts'
+import { orderDraftedBy, orderNamedBy, presentAuditEntry } from './audit.present.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import type { AuditFilter, AuditRow, AuditScope } from './audit.reads.ts'
 
@@ -22,9 +22,14 @@ export interface AuditQuestions {
   read(scope: AuditScope, filter: AuditFilter): Promise<{ rows: AuditRow[]; total: number }>
   /** Of some orders, by number, those with a dose to come that somebody may calculate blind. */
   blindAmong(numbers: readonly string[], actor: Actor): Promise<Set<string>>
+  /** Of some orders, by number, those that keep a working of the bench which somebody is not to see. */
+  benchLeftOutAmong(numbers: readonly string[], actor: Actor): Promise<Set<string>>
 }
 
-export function auditRoutes({ read, blindAmong }: AuditQuestions): Route[] {
+/** Whether an entry may hold what was asked on the bench; the text is searched, as few do. */
+const keepsBench = (row: AuditRow): boolean => orderDraftedBy(row) !== null && row.text.includes('"bench":{')
+
+export function auditRoutes({ read, blindAmong, benchLeftOutAmong }: AuditQuestions): Route[] {
   return [
     route(listAudit, async ({ query, context }) => {
       const { personId, roles } = context.actor
@@ -42,6 +47,8 @@ export function auditRoutes({ read, blindAmong }: AuditQuestions): Route[] {
       const mayReadClinical = decide('chart.read', roles, {}).allowed
       const orders = rows.flatMap((row) => orderNamedBy(row) ?? [])
       const blind = await blindAmong([...new Set(orders)], context.actor)
+      const drafted = rows.flatMap((row) => (keepsBench(row) ? (orderDraftedBy(row) ?? []) : []))
+      const benchLeftOut = await benchLeftOutAmong([...new Set(drafted)], context.actor)
       const last = rows.at(-1)
       return {
         rows: rows.map((row) => {
@@ -49,6 +56,7 @@ export function auditRoutes({ read, blindAmong }: AuditQuestions): Route[] {
           return presentAuditEntry(row, {
             clinical: !mayReadClinical && !isOwn,
             amount: !isOwn && blind.has(orderNamedBy(row) ?? ''),
+            bench: !isOwn && keepsBench(row) && benchLeftOut.has(orderDraftedBy(row) ?? ''),
           })
         }),
         total,

@@ -1,3 +1,4 @@
+import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import { decide } from '../../../shared/domain/permissions/decide.ts'
 import type { Db } from '../../platform/database/db.ts'
@@ -96,5 +97,12 @@ export const leaveOut = (row: OrderRow, blindness: Blindness): OrderRow =>
 
 /** What was signed, without the amount and all that it could be read off from. */
 export function withoutAmount(content: SignedOrder | null) {
-  return content && { ...content, amount: null, working: [], facts: null }
+  if (content === null) return null
+  const { bench: _said, ...rest } = content
+  return { ...rest, fields: withoutBench(rest.fields), amount: null, working: [], facts: null }
+}
+
+/** An order's fields without what was asked on the bench: whoever asks it again has the amount. */
+export function withoutBench({ bench: _asked, ...fields }: BathOrderFields): BathOrderFields {
+  return fields
 }

@@ -24,6 +24,7 @@ import {
   OrderVersion,
   OrderVersionAnimal,
 } from './order.entity.ts'
+import type { AskBench } from './order-bench.ts'
 import { readOrderWork } from './order-work.ts'
 import { readSituation } from './order-situation.ts'
 import { createCourseReporter } from './report-course.ts'
@@ -41,6 +42,7 @@ export { verifyOrders } from './verify-orders.ts'
 export { saidCautions } from './say-order.ts'
 export type { OrdersService } from './orders.service.ts'
 export type { OrderQueries } from './orders.queries.ts'
+export type { AskBench } from './order-bench.ts'
 export { orderNotice } from './order-document.ts'
 export { saidAmount, sayTreated } from './say-order.ts'
 export { sayRounding } from './say-rounding.ts'
@@ -63,6 +65,8 @@ export interface OrdersOutside extends Parts {
   /** Where people reach this installation, for codes on paper. */
   publicUrl: string
   treatments: TreatmentsService
+  /** Asks a calculator of the bench. */
+  askBench: AskBench
 }
 
 export function createOrders(parts: OrdersOutside) {
@@ -91,7 +95,7 @@ export function createOrders(parts: OrdersOutside) {
     hasWater: (enclosureId) => parts.water.questions.hasWaterAt(enclosureId, now()),
     enclosureName: async (id) => (await placeReads.readEnclosure(dataSource, { id }))?.name ?? '',
   })
-  const queries = createOrderQueries({ dataSource, signing, now })
+  const queries = createOrderQueries({ dataSource, signing, now, askBench: parts.askBench })
   const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
   const noteAmountsPreviewed = createAmountsPreviewed({ ...parts, noteAmountsSeen })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
@@ -123,6 +127,7 @@ export function createOrders(parts: OrdersOutside) {
       service,
       queries,
       situation,
+      askBench: parts.askBench,
       now,
       noteAmountsSeen,
       noteAmountsPreviewed,

@@ -119,3 +119,16 @@ export async function readNumbersToldBy(db: Db, orderIds: readonly string[]): Pr
   )
   return rows.map(({ number }) => number)
 }
+
+/** Whether a person worked out the drug of a product for the water of an enclosure, as an order being written. */
+export async function readHasPreviewed(
+  db: Db,
+  asked: { productId: string; enclosureId: string; personId: string; since: Date },
+): Promise<boolean> {
+  const rows: unknown[] = await db.query(
+    `SELECT 1 FROM amounts_previewed a JOIN products p ON p.agent = a.agent
+      WHERE p.id = $1 AND a.enclosure_id = $2 AND a.person_id = $3 AND a.recorded_at >= $4 LIMIT 1`,
+    [asked.productId, asked.enclosureId, asked.personId, asked.since],
+  )
+  return rows.length > 0
+}

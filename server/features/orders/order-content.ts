@@ -1,5 +1,5 @@
 import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
-import type { BathOrderFields, SaidCaution } from '../../../shared/contracts/order-primitives.ts'
+import type { BathOrderFields, SaidBench, SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import type { CautionSettings } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { BathDose } from '../../../shared/domain/dose/bath-dose.ts'
@@ -51,6 +51,8 @@ export interface SignedOrder {
   basisText: string
   amount: ReturnType<typeof saidAmount>
   working: ReturnType<typeof saidLine>[]
+  /** What was worked out beforehand on the bench; orders signed without it have none. */
+  bench?: SaidBench | null
   cautions: SaidCaution[]
   conditions: ReturnType<typeof saidCondition>[]
   overrides: (SignedAnswer & { reason: string })[]
@@ -70,6 +72,7 @@ export interface ContentRequest {
   found: OrderSituation & { product: NonNullable<OrderSituation['product']> }
   dose: BathDose
   volume: NonNullable<WaterFacts['volume']>
+  bench: SaidBench | null
   overrides: Override[]
   read: AnsweredCaution[]
   relationship: string | null
@@ -119,6 +122,7 @@ export function contentOf(request: ContentRequest): SignedOrder {
     basisText: fields.basis ? basisNames[fields.basis] : '',
     amount: saidAmount(dose),
     working: dose.working.map(saidLine),
+    ...(request.bench ? { bench: request.bench } : {}),
     cautions: saidCautions(found),
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,

@@ -14,7 +14,13 @@ import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
-import { doseKindNames, orderPaper, orderWords, relationshipWords } from '../../../shared/messages/orders.ts'
+import {
+  doseKindNames,
+  orderBenchWords,
+  orderPaper,
+  orderWords,
+  relationshipWords,
+} from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
@@ -261,6 +267,25 @@ const aloneBlocks = ({ recorded }: OrderPaper): DocumentBlock[] =>
         ],
   )
 
+/** What was worked out on the bench before the order was written, in small print and after all that is dosed by. */
+function benchBlocks({ content: { bench } }: OrderPaper): DocumentBlock[] {
+  if (!bench) return []
+  const small = (text: string): DocumentBlock => ({ kind: 'paragraph', size: 'small', text })
+  return [
+    { kind: 'heading', text: orderBenchWords.heading },
+    {
+      kind: 'paragraph',
+      text: [
+        { text: bench.head, bold: true },
+        { text: `. ${bench.comparison ?? orderBenchWords.notTheAmount}` },
+      ],
+    },
+    small(orderBenchWords.inputs({ inputs: bench.inputs.join('; ') })),
+    small(orderBenchWords.working({ lines: bench.working.join('; ') })),
+    small(orderBenchWords.sources({ sources: bench.sources.join('; ') })),
+  ]
+}
+
 /** What the signer stated of knowing these animals; nothing in an order by the label. */
 const relationshipBlocks = ({ content }: OrderPaper): DocumentBlock[] =>
   content.relationship
@@ -305,6 +330,7 @@ function statements(paper: OrderPaper): DocumentBlock[] {
     ...noteBlocks(paper),
     ...aloneBlocks(paper),
     ...relationshipBlocks(paper),
+    ...benchBlocks(paper),
   ]
 }
 

@@ -12,7 +12,9 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Actor } from '../../platform/http/request-context.ts'
 import { withFault } from '../signing/index.ts'
 import type { SigningService } from '../signing/index.ts'
-import { leaveOut, mayBeSecond, readBlindness, withoutAmount } from './blind-order.ts'
+import { leaveOut, mayBeSecond, readBlindness, withoutAmount, withoutBench } from './blind-order.ts'
+import { benchForPreview, isBenchLeftOut, isEarlierBenchLeftOut, saidBench } from './order-bench.ts'
+import type { AskBench } from './order-bench.ts'
 import { readOpenOrders } from './order-work.ts'
 import { isOrderText } from './is-order-text.ts'
 import { faultOf } from './record-fault.ts'
@@ -34,6 +36,7 @@ import { lastSigning, missingLinks } from './signing-chain.ts'
 export interface OrderQueriesParts {
   dataSource: Db
   signing: SigningService
+  askBench: AskBench
   now(): Date
 }
 
@@ -89,6 +92,13 @@ export function createOrderQueries(parts: OrderQueriesParts) {
     }
   }
 
+  /** What a draft keeps of the bench, in words; null where the bench has no answer to it any more. */
+  const draftBench = (draft: BathOrderFields) =>
+    saidBench(parts.askBench, draft, null).catch((error: unknown) => {
+      if (error instanceof Problem && error.code === 'bad-input') return null
+      throw error
+    })
+
   return {
     /** Every order that matches, sorted. */
     async find(query: Omit<QueryOf<typeof listOrders>, 'cursor' | 'limit'>): Promise<OrderRow[]> {
@@ -135,6 +145,8 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const isBlind = blindness.isLeftOutFor(row.id, actor)
       const shown = presentOrderRow(row, now, signer)
       const inForce = sealed[0]
+      const draft = row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields)
+      const benchWithheld = await isBenchLeftOut(parts.dataSource, row, { actor, isBlind, now: parts.now() })
       return {
         ...shown,
         record: inForce?.block.state === 'broken' ? 'broken' : shown.record,
@@ -142,7 +154,9 @@ export function createOrderQueries(parts: OrderQueriesParts) {
         targetText: inForce?.content?.targetText ?? null,
         amountsWithheld: isBlind,
         version: row.version,
-        draft: row.draft_text === null ? null : (JSON.parse(row.draft_text) as BathOrderFields),
+        draft: draft && benchWithheld ? withoutBench(draft) : draft,
+        draftBench: draft && !benchWithheld ? await draftBench(draft) : null,
+        benchWithheld,
         createdBy: row.created_by_name ?? '',
         createdAt: row.created_at.toISOString(),
         versions: sealed.map(({ versionNo, block, content }, i) => ({
@@ -182,6 +196,34 @@ export function createOrderQueries(parts: OrderQueriesParts) {
       const rows = await readOrdersNumbered(parts.dataSource, numbers)
       const blindness = await readBlindness(parts.dataSource, rows, now, { areAll: false })
       return new Set(rows.filter((row) => blindness.isLeftOutFor(row.id, actor)).map((row) => row.number))
+    },
+
+    /** What is kept of the bench with an order whose form does not say; see benchForPreview. */
+    async benchForPreview(
+      number: string,
+      actor: Actor,
+      worked: { body: BathOrderFields; isWorkedOut: boolean },
+    ): Promise<Pick<BathOrderFields, 'bench'>> {
+      const row = await rowOf(number)
+      const at = parts.now()
+      const blindness = await readBlindness(parts.dataSource, [row], at.toISOString(), { areAll: false })
+      const isBlind = blindness.isLeftOutFor(row.id, actor)
+      return benchForPreview(parts.dataSource, row, { ...worked, actor, isBlind, now: at })
+    },
+
+    /** Of some orders those of which somebody is not to see what a draft kept of the bench. */
+    async benchLeftOutAmong(numbers: readonly string[], actor: Actor): Promise<Set<string>> {
+      if (numbers.length === 0 || !mayBeSecond(actor)) return new Set()
+      const at = parts.now()
+      const rows = await readOrdersNumbered(parts.dataSource, numbers)
+      const blindness = await readBlindness(parts.dataSource, rows, at.toISOString(), { areAll: false })
+      const leftOut = await Promise.all(
+        rows.map((row) => {
+          const isBlind = blindness.isLeftOutFor(row.id, actor)
+          return isEarlierBenchLeftOut(parts.dataSource, row, { actor, isBlind, now: at })
+        }),
+      )
+      return new Set(rows.filter((_, i) => leftOut[i]).map(({ number }) => number))
     },
 
     idOf: async (number: string): Promise<string> => (await rowOf(number)).id,

@@ -18,6 +18,7 @@ export interface OrderReadRow {
   stage: 'draft' | 'proposed' | 'none'
   draft_text: string | null
   created_at: Date
+  created_by: string | null
   created_by_name: string | null
   version: number
   version_id: string | null
@@ -67,7 +68,7 @@ const chainColumn = `json_build_object(
 
 const columns = `
   o.id, o.number, o.enclosure_id, c.code AS enclosure_code, c.name AS enclosure_name, o.stage, o.draft_text,
-  o.created_at, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
+  o.created_at, o.created_by, w.printed_name AS created_by_name, o.version, v.id AS version_id, v.version_no, v.signed_text_id,
   coalesce(v.agent, f.agent) AS agent, v.amount_entered_value, v.amount_entered_unit, v.doses, v.interval_hours, v.contact_minutes, v.starts_at,
   v.signed_at, s.printed_name AS signed_by_name, t.text AS signed_text,
   CASE WHEN t.id IS NULL THEN NULL ELSE json_build_object('hash', t.hash, 'signature', t.signature, 'keyId', t.key_id) END AS seal,

@@ -10,12 +10,15 @@ import type { SituationParts } from './order-situation.ts'
 import type { LabelPrinter } from './print-label.ts'
 import type { OrderQueries } from './orders.queries.ts'
 import type { OrdersService } from './orders.service.ts'
+import { saidBench } from './order-bench.ts'
+import type { AskBench } from './order-bench.ts'
 import { presentPreview } from './preview-order.ts'
 
 export interface OrderRouteParts {
   service: OrdersService
   queries: OrderQueries
   situation: SituationParts
+  askBench: AskBench
   now(): Date
   noteAmountsSeen: NoteAmountsSeen
   noteAmountsPreviewed: NoteAmountsPreviewed
@@ -26,7 +29,17 @@ export interface OrderRouteParts {
 }
 
 export function orderRoutes(parts: OrderRouteParts): Route[] {
-  const { service, queries, situation, now, noteAmountsSeen, noteAmountsPreviewed, print, printLabel } = parts
+  const {
+    service,
+    queries,
+    situation,
+    askBench,
+    now,
+    noteAmountsSeen,
+    noteAmountsPreviewed,
+    print,
+    printLabel,
+  } = parts
   return [
     route(contracts.listOrders, ({ query }) => queries.list(query)),
     route(contracts.listOrdersCsv, async ({ query }) =>
@@ -42,7 +55,12 @@ export function orderRoutes(parts: OrderRouteParts): Route[] {
       const exceptOrderId = query.order === undefined ? null : await queries.idOf(query.order)
       const found = await readSituation(situation, body, now(), { exceptOrderId })
       await noteAmountsPreviewed(context, found)
-      return presentPreview(body, found)
+      const dose = found.judgement?.dose ?? null
+      const asked =
+        body.bench === undefined && query.order !== undefined
+          ? await queries.benchForPreview(query.order, context.actor, { body, isWorkedOut: dose !== null })
+          : body
+      return presentPreview(body, found, await saidBench(askBench, asked, dose))
     }),
     route(contracts.draftOrder, async ({ body, context }) => {
       const { number } = await service.draftOrder(context, body.id, body.fields)

@@ -13,6 +13,8 @@ import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { checkAnswers } from './check-answers.ts'
+import { keptBench, saidBench } from './order-bench.ts'
+import type { AskBench } from './order-bench.ts'
 import { contentOf } from './order-content.ts'
 import type { Override } from './order-content.ts'
 import type { OrderEventRow, OrderHead } from './order.entity.ts'
@@ -39,6 +41,7 @@ export interface OrdersParts extends SituationParts {
   /** Whether there is such an enclosure and it has water now. */
   hasWater(enclosureId: string): Promise<boolean>
   course: CourseReporter
+  askBench: AskBench
 }
 
 export interface SignRequest {
@@ -118,6 +121,7 @@ export function createOrdersService(parts: OrdersParts) {
     ): Promise<{ number: string }> {
       if (!(await parts.hasWater(fields.enclosureId))) throw noWaterProblem()
       await refuseUnfit(parts, fields, parts.clock.now())
+      await saidBench(parts.askBench, fields, null)
       return parts.transactions.inTransaction(context, async (tx) => {
         const earlier = await repository.findOrderById(tx, id)
         if (earlier) {
@@ -148,13 +152,17 @@ export function createOrdersService(parts: OrdersParts) {
       context: RequestContext,
       number: string,
       expectedVersion: number,
-      fields: BathOrderFields,
+      written: BathOrderFields,
     ) {
-      await refuseUnfit(parts, fields, parts.clock.now())
+      await refuseUnfit(parts, written, parts.clock.now())
+      await saidBench(parts.askBench, written, null)
       await parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
         await refuseEnded(tx, order)
         refuseTheirDraft(context, order)
+        // whoever was not shown what the bench said has nothing to send back, and takes nothing away
+        const fields =
+          written.bench === undefined ? { ...written, ...(await keptBench(tx.manager, number)) } : written
         await repository.saveOrder(
           tx,
           { id: order.id, version: expectedVersion },
@@ -206,6 +214,7 @@ export function createOrdersService(parts: OrdersParts) {
         await refuseUnfit(parts, fields, parts.clock.now())
         const found = await readSituation(parts, fields, tx.at, { db: tx.manager, exceptOrderId: order.id })
         if (found.changed.length > 0) throw new Problem('not-as-entered', { detail: found.changed.join(' ') })
+        const bench = await saidBench(parts.askBench, fields, found.judgement?.dose ?? null)
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
         const isExtralabel = fields.use === 'extralabel'
@@ -235,6 +244,7 @@ export function createOrdersService(parts: OrdersParts) {
           found: { ...found, product },
           dose: judgement.dose,
           volume,
+          bench,
           overrides: request.overrides,
           read: request.read,
           relationship: isExtralabel ? relationshipWords.statement : null,

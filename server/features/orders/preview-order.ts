@@ -1,5 +1,5 @@
 import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
-import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import type { BathOrderFields, SaidBench } from '../../../shared/contracts/order-primitives.ts'
 import { formatVolumeWithError } from '../../../shared/domain/quantities/format-volume-with-error.ts'
 import { formatVolume } from '../../../shared/domain/quantities/format-volume.ts'
 import { orderMissing, orderWords, volumeMethods } from '../../../shared/messages/orders.ts'
@@ -66,7 +66,11 @@ function saidRefusal(found: OrderSituation): OrderPreview['refusal'] {
 }
 
 /** An order as it stands while it is being written. */
-export function presentPreview(fields: BathOrderFields, found: OrderSituation): OrderPreview {
+export function presentPreview(
+  fields: BathOrderFields,
+  found: OrderSituation,
+  bench: SaidBench | null,
+): OrderPreview {
   const { situation, judgement } = found
   const zone = situation.base.zone
   return {
@@ -77,5 +81,6 @@ export function presentPreview(fields: BathOrderFields, found: OrderSituation): 
     cautions: saidCautions(found),
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, zone)) ?? [],
     missing: missingFields(fields).map((field) => orderMissing[field]),
+    bench,
   }
 }

@@ -1,11 +1,10 @@
 import type { AnyCalculator, Carry, Given, OrderCarry } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
 import type { Input } from '../../../shared/bench/inputs.ts'
-import { formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
+import { BenchAsked } from '../../../shared/contracts/order-primitives.ts'
 import { readInputs, type Read } from '../../../shared/bench/read-inputs.ts'
 import { roundedTo } from '../../../shared/bench/round-figure.ts'
-import { sayInputs } from '../../../shared/bench/say-inputs.ts'
-import { say, sayLine } from '../../../shared/bench/words.ts'
+import { sayAnswer } from '../../../shared/bench/say-answer.ts'
 import { withoutTrailingZeros } from '../../../shared/domain/quantities/number-text.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import { concentrationBases, type ConcentrationBasis } from '../../../shared/domain/units/basis.ts'
@@ -13,8 +12,7 @@ import { convert } from '../../../shared/domain/units/convert.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { VolumeSheet } from '../../../shared/domain/water/volume-sheet.ts'
-import { benchCarryWords as words } from '../../../shared/messages/bench-carry.ts'
-import type { BenchCarry, BenchSaid } from '../../lib/bench-carry.ts'
+import type { BenchCarry } from '../../lib/bench-carry.ts'
 
 /** A question and its answer. */
 export interface Asked {
@@ -22,24 +20,6 @@ export interface Asked {
   answer: BenchAnswer
   /** Where the figure of an input comes from and when it was found; undefined for one that was typed. */
   originOf: (input: string) => string | undefined
-}
-
-/** The question and the answer in words, for the form that takes them over. */
-export function saidOf(of: AnyCalculator, { body, answer, originOf }: Asked): BenchSaid {
-  const [figure] = answer.figures
-  const result = formatFigure(figure).text
-  const ends = answer.range && formatRange(answer.range, figure)
-  return {
-    name: say(of, 'name'),
-    result: ends ? words.between({ result, low: ends.low.text, high: ends.high.text }) : result,
-    inputs: sayInputs(of, body).map(({ input, what, text }) => {
-      const from = originOf(input)
-      return from === undefined ? words.line({ what, text }) : words.lineFrom({ what, text, from })
-    }),
-    working: formatWorking(answer).map(({ line, formula, result: shown }) =>
-      words.step({ what: sayLine(of, line), formula, result: shown.text }),
-    ),
-  }
 }
 
 /**
@@ -56,11 +36,11 @@ export function carriedOf(
   enclosureId: string | null,
 ): BenchCarry | null {
   const { body, answer } = asked
-  const said = saidOf(of, asked)
+  const said = sayAnswer(of, asked)
   const { read } = readInputs(of, body)
   switch (carry.to) {
     case 'order':
-      return { to: 'order', said, enclosureId, ...orderPart(carry, read) }
+      return { to: 'order', said, bench: askedOf(of, body), enclosureId, ...orderPart(carry, read) }
     case 'volume': {
       const sheet = carry.sheet?.(read as Given<Record<string, Input>>) ?? statedSheet(answer)
       return sheet && { to: 'volume', said, sheet: sheet as CarriedSheet }
@@ -72,6 +52,12 @@ export function carriedOf(
       return { to: 'reading', said, parameter: carry.parameter, value }
     }
   }
+}
+
+/** The question as an order keeps it; null where it does not fit, and goes on without. */
+function askedOf(of: AnyCalculator, body: unknown): BenchAsked | null {
+  const asked = BenchAsked.safeParse({ calculator: of.id, inputs: body })
+  return asked.success ? asked.data : null
 }
 
 const isTyped = (of: AnyCalculator, parameter: ReadingParameter, read: Read): boolean =>

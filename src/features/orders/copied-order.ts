@@ -11,9 +11,9 @@ export function fieldsOfOrder(order: Order): BathOrderFields | null {
 
 /**
  * A new order that begins as an earlier one. What was true or attested only then is open again: the animals, the lot, the
- * first dose, whether the use is by the label, and whatever was stated of the water.
+ * first dose, whether the use is by the label, whatever was stated of the water, and what was worked out on the bench.
  */
 export function copiedOrder(fields: BathOrderFields, zone: string): OrderValues {
-  const { animalIds, lotId, use, startsAt, stated } = emptyOrder()
-  return { ...valuesOf(fields, zone), animalIds, lotId, use, startsAt, stated }
+  const { animalIds, lotId, use, startsAt, stated, bench } = emptyOrder()
+  return { ...valuesOf(fields, zone), animalIds, lotId, use, startsAt, stated, bench }
 }

@@ -1,4 +1,5 @@
 import { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import type { BenchAsked } from '../../../shared/contracts/order-primitives.ts'
 import { nothingStated } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { instantOfMoment, localMomentOf } from '../../lib/local-moment.ts'
@@ -28,6 +29,8 @@ export interface OrderValues {
   instructions: string
   drift: string
   stated: BathOrderFields['stated']
+  /** What was asked on the bench; undefined: something is kept with the order that is not shown, and stays. */
+  bench: BathOrderFields['bench']
 }
 
 /** How far a volume may have moved since the signature unless the order says otherwise, in percent. */
@@ -58,16 +61,18 @@ export const emptyOrder = (): OrderValues => ({
   instructions: '',
   drift: usualDriftPercent,
   stated: nothingStated,
+  bench: null,
 })
 
 /** The parts of an order that the bench can fill in. */
 export type CarriedPart = 'enclosureId' | 'target' | 'basis' | 'division'
 export type CarriedParts = Pick<BathOrderFields, 'target' | 'basis' | 'division'> & {
   enclosureId: string | null
+  bench: BenchAsked | null
 }
 
 /** A new order with what came from the bench; everything else is open. */
-export function carriedOrder({ enclosureId, target, basis, division }: CarriedParts): OrderValues {
+export function carriedOrder({ enclosureId, target, basis, division, bench }: CarriedParts): OrderValues {
   const start = emptyOrder()
   return {
     ...start,
@@ -75,6 +80,7 @@ export function carriedOrder({ enclosureId, target, basis, division }: CarriedPa
     target: target ?? start.target,
     basis,
     division: division ?? start.division,
+    bench,
   }
 }
 
@@ -105,6 +111,7 @@ export function valuesOf(fields: BathOrderFields, zone: string): OrderValues {
     instructions: fields.instructions,
     drift: String(fields.allowedVolumeDriftPercent),
     stated: fields.stated,
+    bench: fields.bench,
   }
 }
 
@@ -169,6 +176,7 @@ export function fieldsOf(
       instructions: values.instructions.trim(),
       allowedVolumeDriftPercent: allowedVolumeDriftPercent ?? Number(usualDriftPercent),
       stated: values.stated,
+      ...(values.bench === undefined ? {} : { bench: values.bench }),
     },
     faults,
   }
@@ -184,6 +192,7 @@ const minuteOf = (at: string | null) => (at === null ? null : Math.floor(Date.pa
 export function differences(a: BathOrderFields, b: BathOrderFields): (keyof BathOrderFields)[] {
   const text = (value: unknown) => JSON.stringify(value)
   return (Object.keys(BathOrderFields.shape) as (keyof BathOrderFields)[]).filter((name) => {
+    if (name === 'bench') return text(a.bench ?? null) !== text(b.bench ?? null)
     if (name === 'startsAt') return minuteOf(a.startsAt) !== minuteOf(b.startsAt)
     if (name === 'animalIds') return text([...a.animalIds].sort()) !== text([...b.animalIds].sort())
     return text(a[name]) !== text(b[name])

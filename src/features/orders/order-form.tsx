@@ -2,6 +2,7 @@ import { useMemo, useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { Link, useLocation, useNavigate } from 'react-router-dom'
 import { Save } from 'lucide-react'
+import type { BathOrderFields, BenchAsked, SaidBench } from '../../../shared/contracts/order-primitives.ts'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderListWords, orderViewWords } from '../../../shared/messages/orders-screens.ts'
@@ -164,7 +165,13 @@ export function OrderForm({
         />
         <div className="pane stack gap-4">
           {above}
-          {carried ? <CarriedIntoOrder carried={carried} /> : null}
+          <CarriedIntoOrder
+            bench={values.bench}
+            carried={carried}
+            said={judged?.bench ?? null}
+            withheld={opened?.benchWithheld ?? false}
+            onChange={(bench) => change({ bench })}
+          />
           {copied && !opened ? <p className="hint">{words.copied({ number: copied.number })}</p> : null}
           {isProposal ? <p className="hint">{words.proposalNote}</p> : null}
           {stale && fields ? (
@@ -173,6 +180,8 @@ export function OrderForm({
               mine={fields}
               known={{
                 zone,
+                bench: (asked) =>
+                  sayBench(asked, [theirs.draftBench, judged?.bench ?? null], [theirs.draft, fields]),
                 products: formulary?.products ?? [],
                 animals: new Map(judged?.water.animals.map((animal) => [animal.animalId, animal.accession])),
               }}
@@ -285,4 +294,15 @@ function startOf({
   const earlier = copied && fieldsOfOrder(copied)
   if (earlier) return copiedOrder(earlier, zone)
   return carried ? carriedOrder(carried) : emptyOrder()
+}
+
+/** A question to the bench, as the server said the one of them that it is. */
+function sayBench(
+  asked: BenchAsked,
+  said: readonly (SaidBench | null)[],
+  of: readonly (BathOrderFields | null)[],
+): string {
+  const at = of.findIndex((fields) => JSON.stringify(fields?.bench) === JSON.stringify(asked))
+  const found = said[at]
+  return found ? `${found.head}. ${found.inputs.join('; ')}` : asked.calculator
 }

@@ -16,6 +16,7 @@ import { Cartouche } from '../../ui/cartouche.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { AmountsNow } from './amounts-now.tsx'
+import { OrderBench } from './carried-order.tsx'
 import { DoseCalendar } from './dose-calendar.tsx'
 import { DoseText } from './dose-text.tsx'
 import { OrderActs } from './order-acts.tsx'
@@ -116,6 +117,8 @@ export function UnsignedOrder({ order, above }: { order: Order; above: ReactNode
             <DraftFacts fields={order.draft} zone={zone} />
           </section>
         ) : null}
+        {order.draftBench ? <OrderBench said={order.draftBench} /> : null}
+        {order.benchWithheld ? <p>{words.benchWithheld}</p> : null}
       </Area>
     </Sheet>
   )
@@ -227,6 +230,7 @@ export function SignedOrder({
                   <AmountNotes amount={content.amount} division={content.fields.division} />
                 </section>
               ) : null}
+              {content.bench ? <OrderBench said={content.bench} /> : null}
               {version.superseded ? null : (
                 <DoseCalendar order={order} zone={zone} now={now} sheets={record.allowed} />
               )}

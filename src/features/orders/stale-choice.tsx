@@ -4,7 +4,7 @@ import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderViewWords, settingNames } from '../../../shared/messages/orders-screens.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import type { Product } from '../../../shared/contracts/formulary.contract.ts'
-import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import type { BathOrderFields, BenchAsked } from '../../../shared/contracts/order-primitives.ts'
 import { Button } from '../../ui/button.tsx'
 import { DataTable } from '../../ui/data-table.tsx'
 import { differences } from './order-form-model.ts'
@@ -31,16 +31,22 @@ const labels = (): Record<keyof BathOrderFields, string> => ({
   instructions: words.instructions,
   allowedVolumeDriftPercent: words.drift,
   stated: words.stated,
+  bench: words.bench,
 })
 
 /** A part of an order in a few words, for comparing; ids are told apart by what they name. */
 export function sayPart(
   name: keyof BathOrderFields,
   fields: BathOrderFields,
-  known: { zone: string; products: readonly Product[]; animals: ReadonlyMap<string, string> },
+  known: {
+    zone: string
+    products: readonly Product[]
+    animals: ReadonlyMap<string, string>
+    bench: (asked: BenchAsked) => string
+  },
 ): string {
   const value = fields[name]
-  if (value === null || value === '') return words.nothing
+  if (value === null || value === undefined || value === '') return words.nothing
   switch (name) {
     case 'target':
       return fields.target ? doseOfEntered(fields.target) : words.nothing
@@ -66,6 +72,8 @@ export function sayPart(
       return fields.use === 'extralabel' ? orderViewWords.extralabel : orderViewWords.asLabelled
     case 'setting':
       return fields.setting ? settingNames[fields.setting] : words.nothing
+    case 'bench':
+      return fields.bench ? known.bench(fields.bench) : words.nothing
     case 'stated':
       return Object.values(fields.stated)
         .flat()

@@ -46,6 +46,7 @@ const preview = (more: Partial<OrderPreview> = {}): OrderPreview => ({
   cautions: all,
   conditions: [],
   missing: [],
+  bench: null,
   ...more,
 })
 

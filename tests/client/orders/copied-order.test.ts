@@ -51,7 +51,9 @@ describe('an order that begins as an earlier one', () => {
   })
 
   it('leaves open whatever was true or attested only then', () => {
-    const { animalIds, lotId, use, startsAt, stated } = copiedOrder(fields, zone)
+    const from = { ...fields, bench: { calculator: 'bath-dose', inputs: {} } }
+    const { animalIds, lotId, use, startsAt, stated, bench } = copiedOrder(from, zone)
+    expect(bench).toBeNull()
     expect({ animalIds, lotId, use, startsAt, stated }).toEqual({
       animalIds: [],
       lotId: null,

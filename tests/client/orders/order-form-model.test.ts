@@ -98,4 +98,22 @@ describe('the form of an order', () => {
       differences(fields, { ...fields, problem: 'Other', target: { value: '0.1', unit: 'mg/L' } }),
     ).toEqual(['problem', 'target'])
   })
+
+  it('keeps what was asked on the bench, leaves out nothing that it was not shown, and tells two of them apart', () => {
+    const bench = { calculator: 'bath-dose', inputs: { target: { value: '2', unit: 'mg/L' } } }
+    const fieldsWith = (of: OrderValues['bench']) => read({ bench: of }).fields
+    const [kept, none, notShown] = [fieldsWith(bench), fieldsWith(null), fieldsWith(undefined)]
+    if (!kept || !none || !notShown) throw new Error('no fields')
+    expect(BathOrderFields.parse(kept).bench).toEqual(bench)
+    expect(fieldsOf(valuesOf(kept, zone), zone).fields?.bench).toEqual(bench)
+    expect(none.bench).toBeNull()
+    // a draft kept before there was such a part, and one whose part is not shown
+    expect(notShown).not.toHaveProperty('bench')
+    expect(fieldsOf(valuesOf(notShown, zone), zone).fields).not.toHaveProperty('bench')
+    const same = { ...kept, animalIds: none.animalIds, productId: none.productId }
+    expect(differences(same, none)).toEqual(['bench'])
+    expect(differences(none, { ...notShown, animalIds: none.animalIds, productId: none.productId })).toEqual(
+      [],
+    )
+  })
 })
