@@ -30,6 +30,8 @@ export const animalLogWords = defineMessages({
   statedEstimate: (p: { low: number; high: number }) => `Estimated: ${String(p.low)} to ${animals(p.high)}.`,
   described: (p: { taxon: string; name: string; sex: string; stage: string; reason: string }) =>
     `Described as ${p.taxon}${p.name ? `, ${p.name}` : ''}, ${p.sex}, ${p.stage}${because(p.reason)}.`,
+  mayBeFood: (p: { reason: string }) => `May be eaten or set free${because(p.reason)}.`,
+  neverFood: (p: { reason: string }) => `Never eaten and never set free${because(p.reason)}.`,
   marked: (p: { mark: string; value: string; place: string }) =>
     `Mark recorded: ${p.mark} ${p.value}${p.place ? `, ${p.place}` : ''}.`,
   markEnded: (p: { mark: string; value: string; reason: string }) =>

@@ -22,6 +22,7 @@ export const cautionReasonWords = defineMessages({
   R16: 'A foam fractionator carries the drug out and may overflow.',
   R17: 'Chloroquine is poisonous to algae and some invertebrates, and light breaks it down.',
   R18: 'Tricaine is a strong acid: without a buffer the pH falls far, in sea water too, and the animals are burnt by it.',
+  R19: 'The label of tricaine allows it in food fish of four families only, in water above 10 °C, and not within 21 days of harvest.',
   R22: 'The label of hydrogen peroxide excludes some species and stages; warm water makes it harsher.',
   R23: 'Chloramine-T is more poisonous in acid and soft water.',
   R24: 'In alkaline and hard water permanganate leaves its oxide on the gills, and what is given in a day adds up.',
@@ -34,6 +35,7 @@ export const cautionReasonWords = defineMessages({
   R31: 'A dose that rests on an old test rests on other water.',
   R32: 'An error of the volume is the same error of the dose.',
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
+  R37: 'The law forbids nitroimidazoles and fluoroquinolones outside the label in animals that may be eaten. An animal that is set free may be eaten too.',
   R39: 'Another person, working from the label and the container, finds a tenfold error, the wrong water and the wrong bottle.',
   R41: 'Weak or lately handled animals bear a treatment badly.',
   R42: 'Labels and circulars ask for a trial on a few animals where a species has no experience of the drug.',
@@ -55,5 +57,6 @@ export const orderRouteWords = defineMessages({
 /** What a rule may bring besides its level. */
 export const cautionEffectWords = defineMessages({
   secondCalculation: 'a second calculation by another person',
+  holdUntil: 'a day before which treated animals are neither eaten nor set free',
   task: 'work to do: ammonia and nitrite tested every 12 hours, less fed, water changed',
 } satisfies Record<CautionEffect['kind'], string>)

@@ -96,6 +96,13 @@ export interface CautionParams {
   'tricaine-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
   'tricaine-ph-differs': { reading: CautionQuantity; home: CautionQuantity; limit: CautionQuantity }
   'tricaine-home-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
+  'food-or-release-unknown': Record<never, never>
+  'food-or-release-not-said': { animals: readonly NamedAnimal[] }
+  'prohibited-in-food': { animals: readonly NamedAnimal[] }
+  'tricaine-food-family': { animals: readonly NamedAnimal[] }
+  'tricaine-food-cold': { temperature: CautionQuantity; limit: CautionQuantity }
+  'tricaine-food-temperature-unknown': { limit: CautionQuantity }
+  'tricaine-food-hold': { animals: readonly NamedAnimal[]; days: number }
   'peroxide-excluded': { animals: readonly NamedAnimal[] }
   'peroxide-walleye': { animals: readonly NamedAnimal[] }
   'peroxide-eggs': { animals: readonly NamedAnimal[]; from: number; to: number }
@@ -245,6 +252,9 @@ export type ResolveCode =
   | 'change-water'
   | 'buffer-the-bath'
   | 'say-whether-buffered'
+  | 'say-food-or-release'
+  | 'warm-water'
+  | 'hold-animals'
   | 'test-some-first'
   | 'declare-experience'
   | 'check-figure'

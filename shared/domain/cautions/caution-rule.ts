@@ -31,6 +31,7 @@ export const cautionRuleIds = [
   'R16',
   'R17',
   'R18',
+  'R19',
   'R22',
   'R23',
   'R24',
@@ -43,6 +44,7 @@ export const cautionRuleIds = [
   'R31',
   'R32',
   'R34',
+  'R37',
   'R39',
   'R41',
   'R42',
@@ -58,6 +60,8 @@ export type CautionEffect =
   | { kind: 'secondCalculation' }
   /** Ammonia and nitrite are watched, less is fed, water is changed. */
   | { kind: 'task' }
+  /** Animals that are treated are neither eaten nor set free for so many days after the last dose. */
+  | { kind: 'holdUntil'; days: number }
 
 /** The rules that are judged only at the start: on an order each is a condition. */
 export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R30', 'R31', 'R34', 'R39', 'R41'] as const
@@ -96,6 +100,8 @@ export const ruleParameterKeys = [
   'eggsFromDtu',
   'eggsToDtu',
   'warmC',
+  'coldestC',
+  'withdrawalDays',
   'lowestPh',
   'highestPh',
   'differsPh',

@@ -17,6 +17,7 @@ import { ozoneAndUv } from './rules/r15-ozone-and-uv.ts'
 import { foamFractionator } from './rules/r16-foam-fractionator.ts'
 import { chloroquine } from './rules/r17-chloroquine.ts'
 import { tricaine } from './rules/r18-tricaine.ts'
+import { tricaineFood } from './rules/r19-tricaine-food.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
@@ -29,6 +30,7 @@ import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
 import { lot } from './rules/r34-lot.ts'
+import { prohibitedFood } from './rules/r37-prohibited-in-food.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
@@ -57,6 +59,7 @@ export const cautionRules: readonly CautionRule[] = [
   foamFractionator,
   chloroquine,
   tricaine,
+  tricaineFood,
   peroxideSpecies,
   chloramineWater,
   permanganate,
@@ -69,6 +72,7 @@ export const cautionRules: readonly CautionRule[] = [
   staleReadings,
   volume,
   lot,
+  prohibitedFood,
   secondCalculation,
   weakAnimals,
   firstUse,

@@ -9,6 +9,7 @@ export const askedLater = [
   'order.isBuffered',
   'water.homePh',
   'lifeSupport.biofilter',
+  'animals.foodOrRelease',
   'water.totalAmmoniaNMgPerL',
   'water.nitriteNMgPerL',
   'water.unionisedAmmoniaNMgPerL',

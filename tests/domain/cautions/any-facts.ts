@@ -74,6 +74,10 @@ const range = fc.record({
 
 const timed = fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })
 
+const named = fc.array(fc.constant({ label: 'HP-0419', commonName: 'trout', enclosureCode: 'QT-3' }), {
+  maxLength: 1,
+})
+
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
@@ -133,6 +137,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     inWater: anyFact(fc.array(animal, { maxLength: 3 })),
     unwellPercent: anyFact(figure),
     handledInLast24h: anyFact(fc.boolean()),
+    foodOrRelease: anyFact(fc.record({ yes: named, notSaid: named })),
     withoutExperience: anyFact(fc.array(fc.constant('Genus species'), { maxLength: 2 })),
     weights: anyFact(fc.array(weight, { maxLength: 3 })),
   }),

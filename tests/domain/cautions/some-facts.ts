@@ -110,6 +110,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       unwellPercent: known(0),
       handledInLast24h: known(false),
       withoutExperience: known([]),
+      foodOrRelease: known({ yes: [], notSaid: [] }),
       weights: notApplicable(),
     },
     volume: {
