@@ -94,8 +94,6 @@ export function compose(outside: Outside) {
     animals,
   }
   const permits = createPermits(register)
-  const acquisitions = createAcquisitions({ ...register, permits: permits.service })
-  const exports = createExports({ ...register, acquisitions })
   const bench = createBench({ ...parts, facility: facility.service })
   const orders = createOrders({
     ...parts,
@@ -115,6 +113,12 @@ export function compose(outside: Outside) {
     blindAmong: orders.queries.blindAmong,
     benchLeftOutAmong: orders.queries.benchLeftOutAmong,
   })
+  const acquisitions = createAcquisitions({
+    ...register,
+    permits: permits.service,
+    withdrawalHold: orders.withdrawalHold,
+  })
+  const exports = createExports({ ...register, acquisitions })
   const administrations = createAdministrations({
     ...parts,
     facility: facility.service,
