@@ -7,7 +7,7 @@ export type CautionTexts = { [Code in CautionCode]: (params: Said<CautionParams[
 
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
 
-/** Titles of the rules on anaesthesia. */
+/** Titles of the rules on anaesthesia and on the biofilter. */
 export const moreCautionTitles = {
   'tricaine-unbuffered': 'Tricaine without a buffer',
   'tricaine-buffer-unknown': 'Nobody said whether the tricaine is buffered',
@@ -15,6 +15,13 @@ export const moreCautionTitles = {
   'tricaine-ph-unknown': 'The pH of the bath is not known',
   'tricaine-ph-differs': 'The bath is not of the pH of the home water',
   'tricaine-home-ph-unknown': 'The pH of the home water is not known',
+  'biofilter-on': 'Methylene blue with a biofilter on the water',
+  'biofilter-unknown': 'Whether a biofilter is on the water is not known',
+  'nitrogen-unknown': 'Ammonia or nitrite is not known',
+  'nitrogen-before-unknown': 'Nothing to hold ammonia or nitrite against',
+  'nitrogen-rising': 'Ammonia or nitrite is rising',
+  'unionised-ammonia-high': 'Un-ionised ammonia is high',
+  'unionised-ammonia-unknown': 'Un-ionised ammonia is not known',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -30,4 +37,18 @@ export const moreCautionTexts = {
     `The bath reads ${p.reading}, the water that the animals come from ${p.home}: more than ${p.limit} apart.`,
   'tricaine-home-ph-unknown': (p) =>
     `The water that the animals come from was not measured within ${hours(p.maxAgeHours)} on the same scale. The bath may differ from it by ${p.limit} at most.`,
+  'biofilter-on': () =>
+    'A biofilter runs on the connected water. Methylene blue stops it, and ammonia and nitrite rise.',
+  'biofilter-unknown': () =>
+    'The life support of this water has no biofilter that was recorded as on or off, and the order does not say whether there is one. Methylene blue stops it.',
+  'nitrogen-unknown': (p) =>
+    `The biofilter suffers under this drug, and ${p.reading} was not read within ${hours(p.maxAgeHours)}.`,
+  'nitrogen-before-unknown': (p) =>
+    `The biofilter suffers under this drug. There is no earlier reading of ${p.reading} to tell a rise by.`,
+  'nitrogen-rising': (p) =>
+    `The biofilter suffers under this drug. The newest reading of ${p.reading} is ${p.value}, more than ${p.factor} times the ${p.before} of the days before. Test every 12 hours, feed less and change water.`,
+  'unionised-ammonia-high': (p) =>
+    `Un-ionised ammonia nitrogen works out to ${p.value}, above ${p.limit}. Test every 12 hours, feed less and change water.`,
+  'unionised-ammonia-unknown': (p) =>
+    `Temperature and pH of the day or the salinity are missing, so nobody can say whether un-ionised ammonia nitrogen is at most ${p.limit}.`,
 } satisfies Partial<CautionTexts>

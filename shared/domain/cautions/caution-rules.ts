@@ -20,12 +20,15 @@ import { tricaine } from './rules/r18-tricaine.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
+import { methyleneBlue } from './rules/r25-methylene-blue.ts'
 import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
 import { otherAgents } from './rules/r29-other-agents.ts'
+import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
+import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
@@ -58,12 +61,15 @@ export const cautionRules: readonly CautionRule[] = [
   peroxideSpecies,
   chloramineWater,
   permanganate,
+  methyleneBlue,
   defaultRange,
   basis,
   doseSpacing,
   otherAgents,
+  nitrogenRises,
   staleReadings,
   volume,
+  weights,
   lot,
   secondCalculation,
   weakAnimals,

@@ -5,7 +5,16 @@ import type { Fact } from './fact.ts'
 type SignedFacts = Omit<CautionFacts, 'route'> & Partial<Pick<CautionFacts, 'route'>>
 
 /** Facts that orders were signed without before a rule asked for them: nobody said, which is unknown. */
-export const askedLater = ['order.isBuffered', 'water.homePh'] as const satisfies readonly FactPath[]
+export const askedLater = [
+  'order.isBuffered',
+  'water.homePh',
+  'lifeSupport.biofilter',
+  'water.totalAmmoniaNMgPerL',
+  'water.nitriteNMgPerL',
+  'water.unionisedAmmoniaNMgPerL',
+  'water.earlierTotalAmmoniaN',
+  'water.earlierNitriteN',
+] as const satisfies readonly FactPath[]
 
 function withAskedLater(facts: CautionFacts): CautionFacts {
   let whole = facts

@@ -1,4 +1,4 @@
-import type { CautionFacts } from '../cautions/caution-facts.ts'
+import type { CautionFacts, OnOff } from '../cautions/caution-facts.ts'
 import { known, notApplicable, unknown } from '../cautions/fact.ts'
 import type { Fact } from '../cautions/fact.ts'
 import type { BathDose } from '../dose/bath-dose.ts'
@@ -19,6 +19,10 @@ const orUnknown = <T>(value: T | null, source: string): Fact<T> =>
 
 const stated = 'stated on the order'
 
+/** A machine that somebody says is there runs, as far as anybody knows. */
+const onOff = (isThere: boolean | null | undefined): OnOff | null =>
+  typeof isThere === 'boolean' ? (isThere ? 'on' : 'off') : null
+
 function targetFact({ target }: BathOrderDraft): CautionFacts['order']['target'] {
   const unit = findUnit(target.concentration.unit, {})
   if (!unit.ok) return unknown()
@@ -38,7 +42,7 @@ const storageFaults = ['stored-cold', 'precipitate']
  *
  * @source common practice for the day of use, no source
  */
-function storageFault({ lot }: ChosenProduct, { at, zone }: BathFacts): Fact<boolean> {
+function storageFault({ lot }: ChosenProduct, { at, zone }: Pick<BathFacts, 'at' | 'zone'>): Fact<boolean> {
   if (!lot) return unknown()
   if (storageFaults.includes(lot.state)) return known(true, null, 'the lot')
   const { foundClearAt } = lot
@@ -47,7 +51,8 @@ function storageFault({ lot }: ChosenProduct, { at, zone }: BathFacts): Fact<boo
     : unknown()
 }
 
-function lotFacts(chosen: ChosenProduct, base: BathFacts): CautionFacts['lot'] {
+/** What is known of the lot at the instant judged. */
+export function lotFacts(chosen: ChosenProduct, base: Pick<BathFacts, 'at' | 'zone'>): CautionFacts['lot'] {
   const { lot, product } = chosen
   const density =
     product.density === undefined ? null : parseQuantity(product.density, { dimension: 'density', above: 0 })
@@ -143,7 +148,11 @@ export function orderFacts(
       hasBloom: fill(base.water.hasBloom, said.hasBloom),
       hasPlantsOrAlgae: fill(base.water.hasPlantsOrAlgae, said.hasPlantsOrAlgae),
     },
-    lifeSupport: { ...base.lifeSupport, lights: fill(base.lifeSupport.lights, said.lights) },
+    lifeSupport: {
+      ...base.lifeSupport,
+      lights: fill(base.lifeSupport.lights, said.lights),
+      biofilter: fill(base.lifeSupport.biofilter, onOff(said.hasBiofilter)),
+    },
     animals: { ...base.animals, withoutExperience: experience },
   }
 }

@@ -8,7 +8,10 @@ import type { FieldsProps } from './order-fields.tsx'
 type Stated = FieldsProps['values']['stated']
 const yesOrNo = ['oxygenIsLogged', 'hasBloom', 'hasPlantsOrAlgae'] as const
 /** Asked for one drug alone. */
-const ofAgent: Partial<Record<AgentCode, readonly 'isBuffered'[]>> = { tricaine: ['isBuffered'] }
+const ofAgent: Partial<Record<AgentCode, readonly ('isBuffered' | 'hasBiofilter')[]>> = {
+  tricaine: ['isBuffered'],
+  'methylene-blue': ['hasBiofilter'],
+}
 
 /** Facts that no ledger holds, stated by whoever writes; open until somebody says so. */
 export function StatedFields({
