@@ -77,7 +77,7 @@ export function CarryPane({
   }
 
   return (
-    <section className="stack" aria-label={words.further}>
+    <section className="stack bench-further" aria-label={words.further}>
       <h2 className="t-head">{words.further}</h2>
       {needsPlace && chosenId === null ? (
         <EnclosureChooser label={words.whichEnclosure} value={ownId} onChange={setOwnId} />
