@@ -109,7 +109,10 @@ export type ProblemCode = keyof typeof problemStatus
 export const FieldProblem = z.object({
   pointer: z.string().describe('JSON pointer into the body, or /params/… or /query/…'),
   detail: z.string().describe('What to do about it, in plain words'),
-  code: z.string().optional().describe('Stable code of the refusal, where an engine refused'),
+  code: z
+    .string()
+    .optional()
+    .describe('Stable code of the refusal: of the engine that refused, or of what a body lacks'),
 })
 export type FieldProblem = z.infer<typeof FieldProblem>
 

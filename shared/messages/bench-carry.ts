@@ -8,6 +8,8 @@ export const benchCarryWords = defineMessages({
   toReading: (p: { parameter: string }) => `Use as a reading of ${p.parameter}`,
   whichEnclosure: 'For which enclosure',
   chooseEnclosure: 'Choose the enclosure first.',
+  noNetwork:
+    'There is no network, and the form cannot come without one. The figure stays here; try again once there is one.',
   nothingSaved: 'Opens the form, filled in; nothing is kept until you keep it there.',
 
   heading: 'From the bench',

@@ -4,6 +4,8 @@ import { defineMessages } from './define-messages.ts'
 export const bodyWords = defineMessages({
   notJson: 'What was sent is not JSON: look at its brackets, commas and quotation marks.',
   otherEncoding: 'What was sent is in another encoding. Send it as UTF-8, unpacked or packed with gzip.',
+  tooLarge: 'The request is over 1 MB.',
+  notReadable: 'The request could not be read.',
 })
 
 /** Titles of the refusals that cross the wire; the code in contracts/problems.ts is the key. Details say the next step. */

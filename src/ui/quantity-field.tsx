@@ -46,6 +46,7 @@ export function QuantityField(props: QuantityFieldProps) {
   const said = wrong ?? state.fault
   const below = state.working ? partWords.workingOut : (state.workedOut ?? hint)
   const { shown } = state
+  const unit = useRef<HTMLSelectElement>(null)
 
   const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {
     // Enter works the arithmetic out first and must not send the form with unread text
@@ -79,6 +80,7 @@ export function QuantityField(props: QuantityFieldProps) {
             {units.length > 1 ? (
               <span className="control-suffix is-select">
                 <select
+                  ref={unit}
                   aria-label={partWords.unit({ field: label })}
                   // the unit of the number as it stands: what is seen is what goes out, also while it is asked
                   value={quantity.unit}
@@ -93,7 +95,7 @@ export function QuantityField(props: QuantityFieldProps) {
                 </select>
                 <Icon of={ChevronDown} />
               </span>
-            ) : (
+            ) : shown(quantity.unit) === '' ? null : (
               <span className="control-suffix">{shown(quantity.unit)}</span>
             )}
           </div>
@@ -105,7 +107,11 @@ export function QuantityField(props: QuantityFieldProps) {
           from={shown(quantity.unit)}
           to={shown(state.askedUnit)}
           converted={state.converted?.ok ? state.converted.value : null}
-          onAnswer={state.answerUnit}
+          onAnswer={(how) => {
+            state.answerUnit(how)
+            // the buttons go with the question: whoever uses keys goes on from where it was asked
+            unit.current?.focus()
+          }}
         />
       ) : null}
     </div>

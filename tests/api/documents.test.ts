@@ -80,7 +80,11 @@ describe('a paper', () => {
     const reply = await upload({ title: 'Loan\u0000agreement' })
     expect(reply.status).toBe(422)
     expect(reply.body.errors).toEqual([
-      { pointer: '/title', detail: expect.stringMatching(/cannot be written/) },
+      {
+        pointer: '/title',
+        code: 'character-not-writable',
+        detail: expect.stringMatching(/cannot be written/),
+      },
     ])
   })
 

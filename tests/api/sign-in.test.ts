@@ -364,7 +364,11 @@ describe('sign-in', () => {
         .send(body)
       expect(note.status).toBe(422)
       expect(note.body.errors).toEqual([
-        { pointer: '/words', detail: expect.stringMatching(/cannot be written/) },
+        {
+          pointer: '/words',
+          code: 'character-not-writable',
+          detail: expect.stringMatching(/cannot be written/),
+        },
       ])
       const found = await keeper.agent.get('/api/animals?q=%00')
       expect(found.status).toBe(422)

@@ -8,7 +8,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
 import { route } from '../../platform/http/route.ts'
 import type { FileReply, Route } from '../../platform/http/route.ts'
-import { fieldProblems } from '../../platform/http/to-problem.ts'
+import { fieldProblems } from '../../platform/http/field-problems.ts'
 import type { DocumentsService } from './documents.service.ts'
 
 export interface DocumentQueries {
@@ -26,7 +26,7 @@ export async function receiveUpload(
 ): Promise<{ given: UploadFields; file: ReceivedFile }> {
   const { file, fields } = await receive(req, res)
   const parsed = UploadFields.safeParse(fields)
-  if (!parsed.success) throw new Problem('bad-input', { errors: fieldProblems(parsed.error) })
+  if (!parsed.success) throw new Problem('bad-input', { errors: fieldProblems(parsed.error, fields) })
   return { given: parsed.data, file }
 }
 

@@ -16,7 +16,7 @@ import type { RecordRequest, RequestContext } from './request-context.ts'
 import { requestIdOf } from './request-id.ts'
 import { readJson } from './read-json.ts'
 import type { FileReply, Route } from './route.ts'
-import { fieldProblems } from './to-problem.ts'
+import { fieldProblems } from './field-problems.ts'
 import { findUnwritableText } from './unwritable-text.ts'
 
 /** Called when somebody was refused by the permission table. */
@@ -49,7 +49,7 @@ function parsePart(schema: z.ZodType | undefined, value: unknown, root: string) 
   const parsed = schema.safeParse(value)
   return parsed.success
     ? { value: parsed.data, errors: [] }
-    : { value: undefined, errors: fieldProblems(parsed.error, root) }
+    : { value: undefined, errors: fieldProblems(parsed.error, value, root) }
 }
 
 /** Parses every part and reports all that is wrong at once. */

@@ -1,6 +1,5 @@
 import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express'
-import type { z } from 'zod'
-import type { FieldProblem, ProblemBody } from '../../../shared/contracts/problems.ts'
+import type { ProblemBody } from '../../../shared/contracts/problems.ts'
 import { printWords } from '../../../shared/messages/print-problems.ts'
 import { bodyWords, problemTitles } from '../../../shared/messages/problems.ts'
 import type { Log } from '../log.ts'
@@ -9,19 +8,6 @@ import { PdfPoolBusy } from '../pdf/pdf-pool.ts'
 import { PdfRenderError } from '../pdf/pdf-render-error.ts'
 import { notInUtf8 } from './read-json.ts'
 import { requestIdOf } from './request-id.ts'
-
-/** Every issue of a failed parse as a pointer and a sentence, not only the first. */
-export function fieldProblems(error: z.ZodError, root = ''): FieldProblem[] {
-  return error.issues.flatMap((issue) => {
-    const pointer = [root, ...issue.path.map(String)].join('/')
-    if (issue.code === 'unrecognized_keys')
-      return issue.keys.map((key) => ({
-        pointer: `${pointer}/${key}`,
-        detail: issue.message,
-      }))
-    return [{ pointer, detail: issue.message }]
-  })
-}
 
 /** The wire form of a refusal. */
 export function problemBody(problem: Problem, req: Request): ProblemBody {
@@ -38,19 +24,22 @@ export function problemBody(problem: Problem, req: Request): ProblemBody {
   }
 }
 
+/** A body of which nothing was taken in: there is no field to point at, and the code says why. */
+const unread = (of: 'malformed-json' | 'file-too-large', code: string, detail: string): Problem =>
+  new Problem(of, { detail, errors: [{ pointer: '', code, detail }] })
+
 function asProblem(error: unknown): Problem | null {
   if (error instanceof Problem) return error
   if (error instanceof PdfPoolBusy) return new Problem('print-busy', { detail: printWords.busy })
   if (error instanceof PdfRenderError) return new Problem('print-failed', { detail: printWords[error.code] })
   const { type, status } = error as { type?: string; status?: number }
-  if (type === 'entity.parse.failed') return new Problem('malformed-json', { detail: bodyWords.notJson })
+  if (type === 'entity.parse.failed') return unread('malformed-json', 'not-json', bodyWords.notJson)
   if (type === 'encoding.unsupported' || type === notInUtf8)
-    return new Problem('malformed-json', { detail: bodyWords.otherEncoding })
-  if (type === 'entity.too.large')
-    return new Problem('file-too-large', { detail: 'The request is over 1 MB.' })
+    return unread('malformed-json', 'other-encoding', bodyWords.otherEncoding)
+  if (type === 'entity.too.large') return unread('file-too-large', 'body-too-large', bodyWords.tooLarge)
   // Express refuses an address it cannot decode, such as /people/%
   if (error instanceof URIError || status === 400)
-    return new Problem('malformed-json', { detail: 'The request could not be read.' })
+    return unread('malformed-json', 'not-readable', bodyWords.notReadable)
   return null
 }
 

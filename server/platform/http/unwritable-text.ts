@@ -11,17 +11,22 @@ const mostDeep = 60
 const tooDeep = 'This is nested too deep to be read. Send the form again from its page.'
 const says = 'Take out the characters that cannot be written; type the words again rather than pasting them.'
 
+const unwritable = (pointer: string): FieldProblem => ({
+  pointer,
+  code: 'character-not-writable',
+  detail: says,
+})
+
 /**
  * Texts in a request that could be taken in and never be read again: half a character, or a control character. One such
  * record would break every list it stands in.
  */
 export function findUnwritableText(value: unknown, pointer: string, depth = 0): FieldProblem[] {
-  if (depth > mostDeep) return [{ pointer, detail: tooDeep }]
-  if (typeof value === 'string')
-    return control.test(value) || half.test(value) ? [{ pointer, detail: says }] : []
+  if (depth > mostDeep) return [{ pointer, code: 'nested-too-deep', detail: tooDeep }]
+  if (typeof value === 'string') return control.test(value) || half.test(value) ? [unwritable(pointer)] : []
   if (typeof value !== 'object' || value === null) return []
   return Object.entries(value).flatMap(([key, each]) => [
-    ...(findUnwritableText(key, pointer).length > 0 ? [{ pointer, detail: says }] : []),
+    ...(findUnwritableText(key, pointer).length > 0 ? [unwritable(pointer)] : []),
     ...findUnwritableText(each, `${pointer}/${key}`, depth + 1),
   ])
 }

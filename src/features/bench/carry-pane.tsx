@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useState, useSyncExternalStore } from 'react'
 import { useQuery } from '@tanstack/react-query'
 import { useLocation, useNavigate } from 'react-router-dom'
 import type { AnyCalculator, Carry } from '../../../shared/bench/definition.ts'
@@ -32,6 +32,13 @@ const labelOf = (carry: Carry): string => {
     : words.toReading({ parameter: parameterNames[carry.parameter] })
 }
 
+function onNetworkChange(changed: () => void): () => void {
+  for (const event of ['online', 'offline']) window.addEventListener(event, changed)
+  return () => {
+    for (const event of ['online', 'offline']) window.removeEventListener(event, changed)
+  }
+}
+
 /**
  * Takes a result into the form of an order, a volume or a reading. Going back finds the bench as it was left.
  */
@@ -51,6 +58,8 @@ export function CarryPane({
   const { pathname } = useLocation()
   const { data } = useQuery(everyEnclosure)
   const [ownId, setOwnId] = useState<string | null>(null)
+  const online = useSyncExternalStore(onNetworkChange, () => navigator.onLine)
+  const [tried, setTried] = useState(false)
   const chosenId = water.id
   const asked: Asked = {
     body: bodyOf(of, draft),
@@ -66,6 +75,9 @@ export function CarryPane({
   const take = async (carry: Carry) => {
     const carried = carriedOf(of, carry, asked, enclosureId)
     if (!carried) return
+    // the form lives on the server: going there now would leave a sheet that still works for one that cannot come
+    setTried(!navigator.onLine)
+    if (!navigator.onLine) return
     const form =
       carry.to === 'order'
         ? paths.newOrder()
@@ -77,7 +89,7 @@ export function CarryPane({
   }
 
   return (
-    <section className="stack" aria-label={words.further}>
+    <section className="stack bench-further" aria-label={words.further}>
       <h2 className="t-head">{words.further}</h2>
       {needsPlace && chosenId === null ? (
         <EnclosureChooser label={words.whichEnclosure} value={ownId} onChange={setOwnId} />
@@ -95,6 +107,7 @@ export function CarryPane({
           )
         })}
       </div>
+      {tried && !online ? <p role="alert">{words.noNetwork}</p> : null}
       <p className="t-note">{words.nothingSaved}</p>
     </section>
   )

@@ -24,7 +24,12 @@ export function PrintButton({ of, draft }: { of: AnyCalculator; draft: Draft }) 
   return (
     <div className="stack gap-1">
       <span>
-        <Button icon={Download} disabled={refusal.busy} onClick={() => void print()}>
+        {/* not disabled meanwhile: that would take the keys off it */}
+        <Button
+          icon={Download}
+          aria-disabled={refusal.busy}
+          onClick={refusal.busy ? undefined : () => void print()}
+        >
           {refusal.busy ? words.printing : words.print}
         </Button>
       </span>

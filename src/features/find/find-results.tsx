@@ -54,6 +54,13 @@ export function FindResults({ text, onGo }: { text: string; onGo: () => void }) 
     return () => dialog.removeEventListener('keydown', onKeyDown)
   }, [])
 
+  useEffect(() => {
+    // what was found for the text as it was goes when that for the whole text comes: the keys go back to the field with it
+    const dialog = list.current?.closest('dialog')
+    if (dialog && !dialog.contains(document.activeElement))
+      dialog.querySelector<HTMLElement>('input[type=search]')?.focus()
+  }, [data])
+
   const groups = data?.groups ?? []
   const settled = data !== undefined && asked === text && !isFetching
   const count = groups.reduce((sum, group) => sum + group.total, 0)

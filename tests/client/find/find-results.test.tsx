@@ -77,3 +77,18 @@ it('says that nothing was found', async () => {
   expect(one(place, '[role="status"]').textContent).toBe('Nothing found for “nothing”.')
   client.clear()
 })
+
+it('gives the keys back to the field when the find that held them goes', async () => {
+  const { place, field, client } = await opened()
+  await type(field, 'ray')
+  await pause()
+  // the answer to the whole text comes late, and lacks what the keys are on by then
+  await type(field, 'nothing')
+  await press('ArrowDown')
+  expect(document.activeElement?.textContent).toMatch('HP-0412')
+  await pause()
+  await pause()
+  expect(document.activeElement).toBe(field)
+  expect(place.textContent).toContain('Nothing found')
+  client.clear()
+})
