@@ -51,6 +51,8 @@ export interface WeightFact {
   animalId: string
   /** Accession number, for the sentence. */
   label: string
+  taxonGroup: TaxonGroup
+  lifeStage: LifeStage
   grams: number
   at: Instant
   /** Measured on a balance, or reckoned. */
@@ -173,6 +175,8 @@ export interface CautionFacts {
     withoutExperience: Fact<readonly string[]>
     /** Newest weights of those who are treated; whoever was never weighed is not among them. */
     weights: Fact<readonly WeightFact[]>
+    /** Those who are treated and were never weighed; absent in orders signed before weights were asked for. */
+    neverWeighed?: Fact<readonly string[]>
   }
   volume: {
     determination: Fact<VolumeFact>

@@ -111,6 +111,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       handledInLast24h: known(false),
       withoutExperience: known([]),
       weights: notApplicable(),
+      neverWeighed: notApplicable(),
     },
     volume: {
       determination: known({
