@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { doseStates } from '../domain/orders/dose-states.ts'
-import { OrderNumber } from './order-primitives.ts'
+import { OrderNumber, SaidCause } from './order-primitives.ts'
 import { EnteredQuantity, Instant, LocalDate, May, RecordId } from './primitives.ts'
 import { SignatureBlock } from './signing.contract.ts'
 
@@ -171,6 +171,7 @@ export const BathSheet = z.object({
   cautions: z
     .array(
       Caution.extend({
+        cause: SaidCause.optional().describe('By which cause it fired'),
         overridden: z
           .object({
             by: z.string().describe('The veterinarian who signed the override'),

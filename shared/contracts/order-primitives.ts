@@ -110,6 +110,13 @@ export const SaidLine = z.object({
   result: z.string().describe('The answer as shown'),
 })
 
+/** By which cause a caution fired; those of one cause are said as one. */
+export const SaidCause = z.object({
+  resolvedBy: z.array(z.string()).describe('Codes of what would resolve it: any one'),
+  unknownFacts: z.array(z.string()).describe('Facts that were not known and made it fire'),
+  subject: z.string().nullable().describe('The order, test or drug that it is about, where it names one'),
+})
+
 export const SaidCaution = z.object({
   ruleId: z.string().describe('Rule that fired'),
   code: z.string().describe('What it found'),
@@ -120,6 +127,7 @@ export const SaidCaution = z.object({
   resolve: z.array(z.string()).describe('What would resolve it'),
   citations: z.array(z.string()).describe('What it rests on, with marks'),
   secondCalculation: z.boolean().describe('It asks for a second calculation'),
+  cause: SaidCause.optional().describe('By which cause it fired; orders signed earlier do not say it'),
 })
 export type SaidCaution = z.infer<typeof SaidCaution>
 

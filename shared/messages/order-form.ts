@@ -107,6 +107,8 @@ export const orderFormWords = defineMessages({
   designHeading: 'Cautions',
   designNote: 'judged while the order is written and at the signature',
   read: 'I have read this',
+  readEach: (p: { rules: string }) => `I have read each of these: ${p.rules}`,
+  overrideReasonOf: (p: { rule: string }) => `Why ${p.rule} is overridden`,
   overrideReason: 'Why it is overridden',
   overrideHint: 'Signed with the order, and printed on it.',
   overrideByVet: 'Only a veterinarian with a valid licence can override this.',

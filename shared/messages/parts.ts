@@ -28,6 +28,8 @@ export const partWords = defineMessages({
   note: 'Note',
   warning: 'Warning',
   stop: 'Stop',
+  oneCause: (p: { title: string; count: number }) => `${p.title}: one cause, ${String(p.count)} rules`,
+  cautionOf: (p: { level: string; rule: string; title: string }) => `${p.level} ${p.rule}: ${p.title}.`,
   cannotBeOverridden: 'This stop can’t be overridden. Remove its cause.',
   fieldsToChange: (p: { count: number }) =>
     p.count === 1 ? 'One field has to change' : `${p.count} fields have to change`,

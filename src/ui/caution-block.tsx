@@ -51,6 +51,74 @@ export function CautionBlock(props: CautionBlockProps) {
   )
 }
 
+/** One caution among those of one cause: as a block of its own has it, with its rule and a key. */
+export interface CautionMember extends CautionBlockProps {
+  key: string
+  ruleId: string
+}
+
+/**
+ * Cautions of one cause in one block, the gravest first. Each keeps its level, rule, words, answer and override of its own:
+ * nothing folds away, and no stop stands under a lesser word.
+ *
+ * @param acknowledge the one tick that answers every warning among them
+ */
+export function CautionGroupBlock({
+  members,
+  acknowledge,
+}: {
+  members: readonly CautionMember[]
+  acknowledge?: ReactNode
+}) {
+  const [lead] = members
+  if (!lead) return null
+  if (members.length === 1) {
+    const { key: _key, ruleId: _ruleId, ...alone } = lead
+    return <CautionBlock {...alone} override={alone.override ?? acknowledge} />
+  }
+  return (
+    <div className={`caution caution-${lead.level}`}>
+      <span className="caution-level">
+        <Icon of={icons[lead.level]} size={20} />
+        {partWords[lead.level]}
+      </span>
+      <div className="caution-body">
+        <strong className="caution-title">
+          {partWords.oneCause({ title: String(lead.title), count: members.length })}
+        </strong>
+        <ul className="caution-members">
+          {members.map((one) => (
+            <li key={one.key}>
+              <p>
+                <b>
+                  {partWords.cautionOf({
+                    level: partWords[one.level],
+                    rule: one.ruleId,
+                    title: String(one.title),
+                  })}
+                </b>{' '}
+                {one.children}
+              </p>
+              {one.source ? <div className="caution-source">{one.source}</div> : null}
+              {one.cannotOverride ? <p>{partWords.cannotBeOverridden}</p> : null}
+              {one.answer ? (
+                <div className="caution-answer">
+                  <Icon of={Check} />
+                  <span>{one.answer}</span>
+                </div>
+              ) : null}
+              {one.override && !one.cannotOverride ? (
+                <div className="caution-override">{one.override}</div>
+              ) : null}
+            </li>
+          ))}
+        </ul>
+        {acknowledge ? <div className="caution-override">{acknowledge}</div> : null}
+      </div>
+    </div>
+  )
+}
+
 const order: Record<CautionLevel, number> = { stop: 0, warning: 1, note: 2 }
 
 /** Stops first, then warnings, then notes; otherwise as they came. */

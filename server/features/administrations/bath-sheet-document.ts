@@ -5,6 +5,7 @@ import type {
   PdfDocumentModel,
 } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
+import { groupSaid } from '../../../shared/domain/cautions/group-said.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { bathPaper } from '../../../shared/messages/bath-paper.ts'
@@ -15,6 +16,7 @@ import { orderPaper } from '../../../shared/messages/orders.ts'
 import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
+import { mostInOneEdge, oneCauseBlocks } from '../../platform/pdf/grouped-cautions.ts'
 import { signedFrame } from '../../platform/pdf/signed-frame.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
@@ -137,28 +139,29 @@ const cautionLine = ({ title, text }: SheetCaution) => [
   { text: ` ${text}` },
 ]
 
-/** An edge is not divided between pages: with more in it, a long list would leave most of a page empty. */
-const mostInOneEdge = 3
+const overriddenBy = ({ overridden }: SheetCaution) =>
+  overridden
+    ? [
+        { text: orderPaper.overridden({ name: overridden.by }), bold: true },
+        { text: orderPaper.reason({ reason: overridden.reason }) },
+      ]
+    : undefined
 
-/** Neighbours of one level in one edge, so that an ordinary dose has them all on the page of its amount. */
+/** Those of one cause together; else neighbours of one level in one edge, so that an ordinary dose has them all on the page of its amount. */
 function cautionBlocks(cautions: readonly SheetCaution[]): DocumentBlock[] {
   const blocks: CautionBlock[] = []
-  for (const caution of cautions) {
-    const line = cautionLine(caution)
+  let joins = false
+  for (const { lead, members } of groupSaid(cautions)) {
     const before = blocks.at(-1)
-    if (caution.overridden)
-      blocks.push({
-        kind: 'caution',
-        level: caution.level,
-        lines: [line],
-        override: [
-          { text: orderPaper.overridden({ name: caution.overridden.by }), bold: true },
-          { text: orderPaper.reason({ reason: caution.overridden.reason }) },
-        ],
-      })
-    else if (before?.level === caution.level && !before.override && before.lines.length < mostInOneEdge)
+    const override = overriddenBy(lead)
+    const line = cautionLine(lead)
+    const isAlone = members.length === 1
+    if (!isAlone) blocks.push(...oneCauseBlocks(members, overriddenBy))
+    else if (override) blocks.push({ kind: 'caution', level: lead.level, lines: [line], override })
+    else if (joins && before?.level === lead.level && before.lines.length < mostInOneEdge)
       blocks[blocks.length - 1] = { ...before, lines: [...before.lines, line] }
-    else blocks.push({ kind: 'caution', level: caution.level, lines: [line] })
+    else blocks.push({ kind: 'caution', level: lead.level, lines: [line] })
+    joins = isAlone && override === undefined
   }
   return blocks
 }

@@ -4,6 +4,7 @@ import { reentry as reentryRule } from '../../../shared/domain/cautions/rules/r4
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sayTreated } from '../orders/index.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
+import { causeOf } from '../../../shared/domain/cautions/group-said.ts'
 import { listDoseStates } from '../../../shared/domain/orders/dose-states.ts'
 import type { DoseCourse } from '../../../shared/domain/orders/dose-states.ts'
 import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
@@ -156,6 +157,7 @@ function presentCaution(
   const isOpen = caution.level === 'stop' && caution.overridable && overridden === null
   return {
     ...saidForSheet(caution, zone),
+    cause: causeOf(caution),
     overridden,
     finding: isOpen && facts ? findingOf(caution, facts, lotId).finding : null,
   }

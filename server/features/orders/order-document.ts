@@ -24,6 +24,7 @@ import {
 import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
+import { groupedCautions } from '../../platform/pdf/grouped-cautions.ts'
 import { signedFrame } from '../../platform/pdf/signed-frame.ts'
 import { signatureEntry } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
@@ -149,22 +150,27 @@ function roundingBlock({ content: { amount, fields } }: OrderPaper): DocumentBlo
 
 function cautionBlocks({ content, block }: OrderPaper): DocumentBlock[] {
   if (content.cautions.length === 0) return [{ kind: 'paragraph', text: orderPaper.noCautions }]
-  return content.cautions.map((caution) => {
+  const overriddenBy = (caution: SignedOrder['cautions'][number]) => {
     const override = overrideOf(content.overrides, caution)
-    return {
-      kind: 'caution',
-      level: caution.level,
-      title: caution.title,
-      lines: [caution.text],
-      ...(override
-        ? {
-            override: [
-              { text: orderPaper.overridden({ name: block.printedName }), bold: true },
-              { text: orderPaper.reason({ reason: override.reason }) },
-            ],
-          }
-        : {}),
-    }
+    return (
+      override && [
+        { text: orderPaper.overridden({ name: block.printedName }), bold: true },
+        { text: orderPaper.reason({ reason: override.reason }) },
+      ]
+    )
+  }
+  return groupedCautions(content.cautions, {
+    overriddenBy,
+    alone: (caution) => {
+      const override = overriddenBy(caution)
+      return {
+        kind: 'caution',
+        level: caution.level,
+        title: caution.title,
+        lines: [caution.text],
+        ...(override ? { override } : {}),
+      }
+    },
   })
 }
 

@@ -6,6 +6,7 @@ import { labelPaper as words } from '../../../shared/messages/order-label.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
 import { sayDate } from '../../../shared/messages/say-date.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
+import { groupedCautions } from '../../platform/pdf/grouped-cautions.ts'
 import { signedFrame } from '../../platform/pdf/signed-frame.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { orderNotice } from './order-document.ts'
@@ -106,9 +107,13 @@ const ofTheWriting: readonly string[] = ['R26', 'R48']
 function cautions({ content }: LabelPaper): DocumentBlock[] {
   return [
     { kind: 'heading', text: words.cautions },
-    ...content.cautions
-      .filter(({ level, ruleId }) => level !== 'note' && !ofTheWriting.includes(ruleId))
-      .map(({ level, title, text }): DocumentBlock => ({ kind: 'caution', level, title, lines: [text] })),
+    ...groupedCautions(
+      content.cautions.filter(({ level, ruleId }) => level !== 'note' && !ofTheWriting.includes(ruleId)),
+      {
+        overriddenBy: () => undefined,
+        alone: ({ level, title, text }) => ({ kind: 'caution', level, title, lines: [text] }),
+      },
+    ),
     { kind: 'caution', level: 'stop-if', lines: [content.fields.stopIf] },
     { kind: 'paragraph', text: words.keep },
   ]

@@ -13,6 +13,7 @@ import type { WorkingLine } from '../../../shared/domain/working/working-line.ts
 import { sayCaution, sayCondition } from '../../../shared/messages/say-caution.ts'
 import { orderWords } from '../../../shared/messages/orders.ts'
 import { workingLabels } from '../../../shared/messages/working.ts'
+import { causeOf } from '../../../shared/domain/cautions/group-said.ts'
 import type { OrderSituation } from './order-situation.ts'
 
 type Line = OrderPreview['working'][number]
@@ -34,6 +35,7 @@ export function saidCaution(caution: Caution, zone: string): SaidCaution {
     resolve: resolves,
     citations: caution.sources.map(({ source, mark }) => `${sources[source].citation} (${mark})`),
     secondCalculation: needsSecond(caution.effects),
+    cause: causeOf(caution),
   }
 }
 

@@ -14,7 +14,7 @@ export interface WithCause {
 }
 
 /** Cautions of one cause: one line on screen and paper, with all of them underneath as they are. */
-export interface CautionGroup<C extends WithCause> {
+export interface CautionGroup<C> {
   /** The gravest of them, which the line is said by; of equal ones the first. */
   lead: C
   level: CautionLevel

@@ -1,5 +1,8 @@
 import type { BathSheet, RecordedDose, RunningBath } from '../../../shared/contracts/doses.contract.ts'
+import { groupSaid } from '../../../shared/domain/cautions/group-said.ts'
 import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
+
+type Step = BathSheet['steps'][number]
 
 /** Whether the dose is recorded, or not to be given any more. */
 export const isNotToCome = ({ state }: Pick<BathSheet, 'state'>): boolean =>
@@ -124,6 +127,25 @@ export function openSteps(sheet: BathSheet): BathSheet['steps'] {
 export function otherCautions(sheet: BathSheet): BathSheet['cautions'] {
   const told = new Set(sheet.steps.map(({ ruleId }) => ruleId))
   return sheet.cautions.filter(({ ruleId }) => !told.has(ruleId))
+}
+
+/** Steps of one cause, the first in its place: what is open of them is said and resolved together. */
+export function stepsOfOneCause({ steps, cautions }: Pick<BathSheet, 'steps' | 'cautions'>): Step[][] {
+  const open = steps.filter(({ state }) => state !== 'met')
+  const fired = cautions.filter(({ ruleId }) => open.some((step) => step.ruleId === ruleId))
+  const groups: Step[][] = []
+  for (const step of steps) {
+    const related = groupSaid(fired)
+      .filter(({ members }) => members.some(({ ruleId }) => ruleId === step.ruleId))
+      .flatMap(({ members }) => members.map(({ ruleId }) => ruleId))
+    const group =
+      step.state === 'met'
+        ? undefined
+        : groups.find((one) => one.some(({ ruleId }) => related.includes(ruleId)))
+    if (group) group.push(step)
+    else groups.push([step])
+  }
+  return groups
 }
 
 const byNeed: BathSheet['calendar'][number]['state'][] = ['running', 'late', 'due', 'coming', 'given']

@@ -1,11 +1,12 @@
 import { OctagonX } from 'lucide-react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
+import { groupSaid } from '../../../shared/domain/cautions/group-said.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { overrideWords, sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
 import { sayMoment } from '../../lib/say-moment.ts'
-import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
+import { CautionBlock, CautionGroupBlock } from '../../ui/caution-block.tsx'
 import { Facts } from '../../ui/facts.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { PairOfAmounts } from '../../ui/pair-of-amounts.tsx'
@@ -155,29 +156,36 @@ export function Amounts({ sheet }: { sheet: BathSheet }) {
 
 /** Cautions that fire now and that no step speaks of, the gravest first. */
 export function CautionsNow({ sheet }: { sheet: BathSheet }) {
-  const cautions = sortCautions(otherCautions(sheet))
+  const cautions = otherCautions(sheet)
   if (cautions.length === 0) return null
   return (
     <section className="stack">
       <h2 className="t-head">{words.cautions}</h2>
-      {cautions.map((caution) => (
-        <CautionBlock
-          key={`${caution.ruleId} ${caution.text}`}
-          level={caution.level}
-          title={caution.title}
-          answer={
-            caution.overridden
+      {groupSaid(cautions).map(({ lead, members }) => (
+        <CautionGroupBlock
+          key={keyOf(lead)}
+          members={members.map((caution) => ({
+            key: keyOf(caution),
+            ruleId: caution.ruleId,
+            level: caution.level,
+            title: caution.title,
+            answer: caution.overridden
               ? orderViewWords.overridden({ name: caution.overridden.by, reason: caution.overridden.reason })
-              : undefined
-          }
-        >
-          {[caution.text, ...(caution.overridden ? [] : caution.resolve)].join(' ')}
-          <OverrideAct sheet={sheet} stop={caution} />
-        </CautionBlock>
+              : undefined,
+            children: (
+              <>
+                {[caution.text, ...(caution.overridden ? [] : caution.resolve)].join(' ')}
+                <OverrideAct sheet={sheet} stop={caution} />
+              </>
+            ),
+          }))}
+        />
       ))}
     </section>
   )
 }
+
+const keyOf = ({ ruleId, text }: BathSheet['cautions'][number]) => `${ruleId} ${text}`
 
 /** Stops that a veterinarian overrode for this dose, with the reason as it was signed. */
 export function SignedOverrides({ sheet, zone }: { sheet: BathSheet; zone: string }) {

@@ -1,4 +1,3 @@
-import type { ReactNode } from 'react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
@@ -11,6 +10,7 @@ import { Conditions } from '../../ui/condition-row.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useNoteLot } from './mutations.ts'
+import { stepsOfOneCause } from './sheet-model.ts'
 import { OverrideAct } from './override-dialog.tsx'
 
 type Step = BathSheet['steps'][number]
@@ -22,20 +22,50 @@ export function SheetSteps({ sheet, lotId }: { sheet: BathSheet; lotId: string |
     <Conditions
       heading={words.conditions}
       note={words.conditionsNote}
-      conditions={sheet.steps.map((step) => ({
-        key: step.ruleId,
-        state: step.state === 'met' ? 'met' : step.state === 'unknown' ? 'open' : 'unmet',
-        what: step.text,
-        known: knownOf(step, sheet, lotId),
+      conditions={stepsOfOneCause(sheet).map((steps) => ({
+        key: steps.map(({ ruleId }) => ruleId).join(' '),
+        state: stateOf(steps),
+        what: steps.map((step) => (
+          <span key={step.ruleId} className={steps.length > 1 ? 'block' : undefined}>
+            {steps.length > 1 ? `${step.ruleId}: ${step.text}` : step.text}
+          </span>
+        )),
+        known: steps.every(({ state, changed }) => state === 'met' && changed.length === 0) ? undefined : (
+          <Known steps={steps} sheet={sheet} lotId={lotId} />
+        ),
       }))}
     />
   )
 }
 
-/** What is said below a step: a limit that was changed since, and what is open. */
-function knownOf(step: Step, sheet: BathSheet, lotId: string | null): ReactNode {
-  if (step.state !== 'met') return <OpenStep step={step} sheet={sheet} lotId={lotId} />
-  return step.changed.length > 0 ? <Changed step={step} /> : undefined
+const stateOf = (steps: readonly Step[]) =>
+  steps.every(({ state }) => state === 'met')
+    ? 'met'
+    : steps.some(({ state }) => state === 'unmet')
+      ? 'unmet'
+      : 'open'
+
+/** Places that are said by a link alone, which says the same for every step. */
+const placesOnly: readonly Step['place'][] = ['readings', 'volume', 'water', 'lot']
+
+/** What is said below steps: of each what is open, and where several are resolved in one place that place once. */
+function Known({ steps, sheet, lotId }: { steps: readonly Step[]; sheet: BathSheet; lotId: string | null }) {
+  return steps.map((step, i) => {
+    const isLed =
+      placesOnly.includes(step.place) &&
+      steps.slice(i + 1).some((later) => !later.overridden && later.place === step.place)
+    if (step.state === 'met') return <Changed key={step.ruleId} step={step} />
+    return (
+      <OpenStep
+        key={step.ruleId}
+        step={step}
+        sheet={sheet}
+        lotId={lotId}
+        name={steps.length > 1 ? step.ruleId : undefined}
+        leads={!isLed}
+      />
+    )
+  })
 }
 
 /** The step shows the limit that was signed; another one in force stands apart from it. */
@@ -46,16 +76,31 @@ const Changed = ({ step }: { step: Step }) =>
     </span>
   ))
 
-function OpenStep({ step, sheet, lotId }: { step: Step; sheet: BathSheet; lotId: string | null }) {
+function OpenStep({
+  step,
+  sheet,
+  lotId,
+  name,
+  leads,
+}: {
+  step: Step
+  sheet: BathSheet
+  lotId: string | null
+  /** Its rule, where it stands among others. */
+  name: string | undefined
+  /** It says where it is resolved; a later one of the same place does otherwise. */
+  leads: boolean
+}) {
   return (
     <span className="open-step">
+      {name === undefined ? null : <b>{name}</b>}
       {step.help === null ? null : <span>{step.help}</span>}
       <Changed step={step} />
       {step.overridden ? (
         <Overridden step={step} sheet={sheet} />
-      ) : (
+      ) : leads ? (
         <WhereToResolve step={step} sheet={sheet} lotId={lotId} />
-      )}
+      ) : null}
       {stopsOf(sheet, step).map((stop) => (
         <OverrideAct key={stop.text} sheet={sheet} stop={stop} />
       ))}

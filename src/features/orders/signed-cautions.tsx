@@ -1,9 +1,10 @@
 import type { SignedBathOrder } from '../../../shared/contracts/signed-order.ts'
 import type { SaidCaution } from '../../../shared/contracts/order-primitives.ts'
+import { groupSaid } from '../../../shared/domain/cautions/group-said.ts'
 import { overrideOf, wasRead } from '../../../shared/domain/orders/signed-answers.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { cautionKey } from './answers-model.ts'
-import { CautionBlock, sortCautions } from '../../ui/caution-block.tsx'
+import { CautionGroupBlock } from '../../ui/caution-block.tsx'
 
 /** Where a caution comes from and what would resolve it, one touch away. */
 export function CautionSource({ caution }: { caution: SaidCaution }) {
@@ -45,17 +46,19 @@ export function SignedCautions({ content, signer }: { content: SignedBathOrder; 
         {words.cautions} <span className="t-note ml-1">{words.cautionsAtSigning}</span>
       </h2>
       {content.cautions.length === 0 ? <p className="t-2">{words.noCautions}</p> : null}
-      {sortCautions(content.cautions).map((caution) => (
-        <CautionBlock
-          key={cautionKey(caution)}
-          level={caution.level}
-          title={caution.title}
-          source={<CautionSource caution={caution} />}
-          answer={answerOf(caution)}
-        >
-          {caution.text}
-          {caution.secondCalculation ? ` ${words.secondPerson}` : ''}
-        </CautionBlock>
+      {groupSaid(content.cautions).map(({ lead, members }) => (
+        <CautionGroupBlock
+          key={cautionKey(lead)}
+          members={members.map((caution) => ({
+            key: cautionKey(caution),
+            ruleId: caution.ruleId,
+            level: caution.level,
+            title: caution.title,
+            source: <CautionSource caution={caution} />,
+            answer: answerOf(caution),
+            children: `${caution.text}${caution.secondCalculation ? ` ${words.secondPerson}` : ''}`,
+          }))}
+        />
       ))}
     </section>
   )

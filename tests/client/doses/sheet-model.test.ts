@@ -20,6 +20,7 @@ import {
   otherCautions,
   ownBath,
   sheetMode,
+  stepsOfOneCause,
   waitsForOthers,
 } from '../../../src/features/doses/sheet-model.ts'
 
@@ -237,6 +238,24 @@ describe('what the sheet shows once', () => {
     overridden: null,
     finding: null,
   }
+  it('puts open steps of one cause together, in the place of the first, and leaves the met ones alone', () => {
+    const cause = { resolvedBy: ['read-oxygen'], unknownFacts: ['water.oxygenMgPerL'], subject: null }
+    const steps = [
+      { ...step, ruleId: 'R01' },
+      { ...step, ruleId: 'R14' },
+      { ...step, ruleId: 'R31' },
+    ]
+    const fired = ['R01', 'R31'].map((ruleId) => ({ ...caution, ruleId, cause }))
+    const idsOf = (groups: readonly (readonly { ruleId: string }[])[]) =>
+      groups.map((group) => group.map(({ ruleId }) => ruleId))
+    const together = sheet({ steps, cautions: fired })
+    expect(idsOf(stepsOfOneCause(together))).toEqual([['R01', 'R31'], ['R14']])
+    const met = sheet({ steps: steps.map((one) => ({ ...one, state: 'met' as const })), cautions: [] })
+    expect(idsOf(stepsOfOneCause(met))).toEqual([['R01'], ['R14'], ['R31']])
+    // kept by an earlier version, which told no cause
+    const untold = sheet({ steps, cautions: [caution, { ...caution, ruleId: 'R01' }] })
+    expect(idsOf(stepsOfOneCause(untold))).toEqual([['R01'], ['R14'], ['R31']])
+  })
   it('says a caution in its step and not a second time', () => {
     const one = sheet({
       steps: [step, { ...step, ruleId: 'R39', place: 'second-calculation' }, { ...step, state: 'met' }],
