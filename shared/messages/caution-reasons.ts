@@ -34,6 +34,7 @@ export const cautionReasonWords = defineMessages({
   R30: 'Where a drug harms the biofilter, ammonia and nitrite rise within days, and harm the animals more than what was treated.',
   R31: 'A dose that rests on an old test rests on other water.',
   R32: 'An error of the volume is the same error of the dose.',
+  R33: 'An error of the weight is the same error of the dose.',
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
   R37: 'The law forbids nitroimidazoles and fluoroquinolones outside the label in animals that may be eaten. An animal that is set free may be eaten too.',
   R39: 'Another person, working from the label and the container, finds a tenfold error, the wrong water and the wrong bottle.',

@@ -176,6 +176,11 @@ export interface CautionParams {
   'volume-estimated-error-unknown': { limitPercent: number }
   'volume-error-large': { errorPercent: number; limitPercent: number }
   'volume-differs': { now: CautionQuantity; before: CautionQuantity; determinedOn: string }
+  'weight-unknown': Record<never, never>
+  'weight-missing': { animals: readonly string[] }
+  'weight-old': { animals: readonly string[]; limitDays: number }
+  'weight-implausible': { animals: readonly string[] }
+  'weight-estimated': { animals: readonly string[] }
   'lot-expired': { expiresOn: string }
   'lot-expiry-unknown': Record<never, never>
   'lot-recalled': Record<never, never>
@@ -269,6 +274,7 @@ export type ResolveCode =
   | 'check-start'
   | 'check-plan'
   | 'determine-volume'
+  | 'weigh-animals'
   | 'calculate-again-by-another'
   | 'let-animals-rest'
   | 'look-at-animals'

@@ -52,6 +52,8 @@ export interface WeightFact {
   animalId: string
   /** Accession number, for the sentence. */
   label: string
+  taxonGroup: TaxonGroup
+  lifeStage: LifeStage
   grams: number
   at: Instant
   /** Measured on a balance, or reckoned. */
@@ -182,6 +184,8 @@ export interface CautionFacts {
     foodOrRelease: Fact<FoodOrRelease>
     /** Newest weights of those who are treated; whoever was never weighed is not among them. */
     weights: Fact<readonly WeightFact[]>
+    /** Those who are treated and were never weighed; absent in orders signed before weights were asked for. */
+    neverWeighed?: Fact<readonly string[]>
   }
   volume: {
     determination: Fact<VolumeFact>

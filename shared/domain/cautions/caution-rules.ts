@@ -29,6 +29,7 @@ import { otherAgents } from './rules/r29-other-agents.ts'
 import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
+import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
 import { prohibitedFood } from './rules/r37-prohibited-in-food.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
@@ -71,6 +72,7 @@ export const cautionRules: readonly CautionRule[] = [
   nitrogenRises,
   staleReadings,
   volume,
+  weights,
   lot,
   prohibitedFood,
   secondCalculation,

@@ -49,6 +49,8 @@ const animal = fc.record({
 const weight = fc.record({
   animalId: fc.uuid(),
   label: fc.constant('HP-0001'),
+  taxonGroup: fc.constantFrom(...taxonGroupNames),
+  lifeStage: fc.constantFrom('egg' as const, 'fry' as const, 'adult' as const, 'unknown' as const),
   grams: figure,
   at: instant,
   measured: fc.boolean(),
@@ -140,6 +142,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     foodOrRelease: anyFact(fc.record({ yes: named, notSaid: named })),
     withoutExperience: anyFact(fc.array(fc.constant('Genus species'), { maxLength: 2 })),
     weights: anyFact(fc.array(weight, { maxLength: 3 })),
+    neverWeighed: anyFact(fc.array(fc.constant('HP-0002'), { maxLength: 2 })),
   }),
   volume: fc.record({
     determination: anyFact(

@@ -112,6 +112,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       withoutExperience: known([]),
       foodOrRelease: known({ yes: [], notSaid: [] }),
       weights: notApplicable(),
+      neverWeighed: notApplicable(),
     },
     volume: {
       determination: known({
