@@ -38,8 +38,11 @@ export const cautionReasonWords = defineMessages({
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
   R37: 'The law forbids nitroimidazoles and fluoroquinolones outside the label in animals that may be eaten. An animal that is set free may be eaten too.',
   R39: 'Another person, working from the label and the container, finds a tenfold error, the wrong water and the wrong bottle.',
+  R40: 'Formaldehyde is a carcinogen and a sensitiser, and leaves the water into the air.',
   R41: 'Weak or lately handled animals bear a treatment badly.',
   R42: 'Labels and circulars ask for a trial on a few animals where a species has no experience of the drug.',
+  R43: 'Of 30 samples after itraconazole from bulk powder 26 held none that could be measured.',
+  R44: 'Together they harm kidneys and gut more than either does.',
   R47: 'A figure beyond every published range for the drug is a slip, and not a decision.',
   R48: 'A plan far ahead, long, or blind to earlier doses is decided for animals and water that will be others by then.',
   R49: 'A range holds for the water and the contact time that it was published for.',
@@ -58,6 +61,7 @@ export const orderRouteWords = defineMessages({
 /** What a rule may bring besides its level. */
 export const cautionEffectWords = defineMessages({
   secondCalculation: 'a second calculation by another person',
+  reentry: 'a time before which nobody stays in the room without protection',
   holdUntil: 'a day before which treated animals are neither eaten nor set free',
   task: 'work to do: ammonia and nitrite tested every 12 hours, less fed, water changed',
 } satisfies Record<CautionEffect['kind'], string>)

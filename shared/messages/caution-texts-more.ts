@@ -7,6 +7,9 @@ export type CautionTexts = { [Code in CautionCode]: (params: Said<CautionParams[
 
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
 
+/** Where the air is meant. */
+const at = (places: string) => (places === '' ? '' : ` At ${places}.`)
+
 /** Titles of the rules on anaesthesia and on the biofilter. */
 export const moreCautionTitles = {
   'tricaine-unbuffered': 'Tricaine without a buffer',
@@ -29,6 +32,12 @@ export const moreCautionTitles = {
   'tricaine-food-cold': 'Too cold for tricaine in fish that may be eaten',
   'tricaine-food-temperature-unknown': 'Temperature for food fish is not known',
   'tricaine-food-hold': 'Not eaten and not set free for a time',
+  'room-not-aired': 'Formalin in a room that is not aired',
+  'room-air-unknown': 'Nobody said whether the room is aired',
+  'itraconazole-from-bulk': 'Itraconazole from bulk powder',
+  'itraconazole-source-unknown': 'Where this itraconazole comes from is not known',
+  'animal-uses-unknown': 'Other drugs of these animals are not known',
+  'anti-inflammatories-together': 'Anti-inflammatories too close together',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -72,4 +81,16 @@ export const moreCautionTexts = {
     `No temperature of the last hours. The label allows tricaine in food fish above ${p.limit} only.`,
   'tricaine-food-hold': (p) =>
     `For ${counted(p.days, 'day', 'days')} after the last dose these are neither eaten nor set free: ${p.animals}.`,
+  'room-not-aired': (p) =>
+    `The order says that the room is not aired.${at(p.places)} Given now, nobody stays there without protection until ${p.reentryAt}: ${counted(p.minutes, 'minute', 'minutes')}, or until the air is measured below the action level.`,
+  'room-air-unknown': (p) =>
+    `The order does not say whether the room is aired.${at(p.places)} Given now, nobody stays there without protection until ${p.reentryAt}: ${counted(p.minutes, 'minute', 'minutes')}, or until the air is measured below the action level.`,
+  'itraconazole-from-bulk': () =>
+    'This lot was compounded from bulk powder. Most animals that were given such had none in the blood.',
+  'itraconazole-source-unknown': () =>
+    'Whether this lot was compounded from bulk powder is not recorded. Most animals that were given such had none in the blood.',
+  'animal-uses-unknown': () =>
+    'What else these animals are given is not known, so anti-inflammatories that must not meet can’t be told apart.',
+  'anti-inflammatories-together': (p) =>
+    `Order ${p.orderNumber} gives ${p.agent} to these animals less than ${hours(p.limitHours)} away. Together they harm kidneys and gut.`,
 } satisfies Partial<CautionTexts>

@@ -107,3 +107,18 @@ export async function readFoodOrRelease(
   }
   return known
 }
+
+/** An animal with every group that joined it, or joined those: what these were given it carries. */
+export async function readJoined(db: Db, animalId: string): Promise<string[]> {
+  const rows: { id: string }[] = await db.query(
+    `WITH RECURSIVE joined AS (
+       SELECT $1::uuid AS id
+        UNION
+       SELECT o.animal_id FROM joined j
+         JOIN live_count_entries c ON c.animal_id = j.id AND c.kind = 'merge-in'
+         JOIN live_count_entries o ON o.transfer_id = c.transfer_id AND o.id <> c.id)
+     SELECT id FROM joined`,
+    [animalId],
+  )
+  return rows.map(({ id }) => id)
+}

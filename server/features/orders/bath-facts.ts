@@ -160,6 +160,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
         history: {
           ...history,
           reducerInUse: unknown(),
+          // no order gives a drug to the animals themselves yet
+          animalUses: notApplicable(),
         },
       }
       return { base, water, animals }

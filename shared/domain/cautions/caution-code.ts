@@ -166,6 +166,12 @@ export interface CautionParams {
   }
   'unionised-ammonia-high': { value: CautionQuantity; limit: CautionQuantity }
   'unionised-ammonia-unknown': { limit: CautionQuantity }
+  'room-not-aired': { places: readonly string[]; minutes: number; reentryAt: string }
+  'room-air-unknown': { places: readonly string[]; minutes: number; reentryAt: string }
+  'itraconazole-from-bulk': Record<never, never>
+  'itraconazole-source-unknown': Record<never, never>
+  'animal-uses-unknown': Record<never, never>
+  'anti-inflammatories-together': { orderNumber: string; agent: AgentCode; limitHours: number }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -249,6 +255,8 @@ export type ResolveCode =
   | 'fractionator-off'
   | 'biofilter-off'
   | 'say-whether-biofilter'
+  | 'air-the-room'
+  | 'keep-people-out'
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'

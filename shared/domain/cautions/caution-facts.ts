@@ -145,6 +145,8 @@ export interface CautionFacts {
     copperCourse: Fact<'not-started' | 'ramp' | 'hold'>
     /** Bicarbonate goes into the bath with tricaine. */
     isBuffered: Fact<boolean>
+    /** Out of doors, or in a room whose air is changed. */
+    isAired: Fact<boolean>
     spacing: Fact<DoseSpacing>
   }
   water: {
@@ -207,10 +209,14 @@ export interface CautionFacts {
     status: Fact<'usable' | 'recalled' | 'quarantined'>
     /** Kept too cold or frozen, or a white precipitate seen. */
     storageFault: Fact<boolean>
+    /** Compounded from powder that is no approved product. */
+    isFromBulk: Fact<boolean>
     densityGPerMl: Fact<number>
   }
   history: {
     agentUses: Fact<readonly AgentUse[]>
+    /** Other orders that are given to these animals themselves. */
+    animalUses: Fact<readonly AgentUse[]>
     /** Of this agent into this water in the 24 h before, mg/L. */
     givenInLast24hMgPerL: Fact<number>
     reducerInUse: Fact<boolean>

@@ -47,8 +47,11 @@ export const cautionRuleIds = [
   'R34',
   'R37',
   'R39',
+  'R40',
   'R41',
   'R42',
+  'R43',
+  'R44',
   'R47',
   'R48',
   'R49',
@@ -63,9 +66,23 @@ export type CautionEffect =
   | { kind: 'task' }
   /** Animals that are treated are neither eaten nor set free for so many days after the last dose. */
   | { kind: 'holdUntil'; days: number }
+  /** Nobody stays in the room without protection for so many minutes after the dose. */
+  | { kind: 'reentry'; minutes: number }
 
 /** The rules that are judged only at the start: on an order each is a condition. */
-export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R30', 'R31', 'R34', 'R39', 'R41'] as const
+export const startRuleIds = [
+  'R01',
+  'R07',
+  'R14',
+  'R15',
+  'R16',
+  'R30',
+  'R31',
+  'R34',
+  'R39',
+  'R40',
+  'R41',
+] as const
 export type StartRuleId = (typeof startRuleIds)[number]
 
 /** Thresholds by name; one name means the same in every rule, so one catalogue words them all. */
@@ -135,6 +152,7 @@ export const ruleParameterKeys = [
   'amountGrams',
   'amountMillilitres',
   'amountShare',
+  'reentryMinutes',
   'unwellPercent',
   'beyondFactor',
   'sameDayHours',

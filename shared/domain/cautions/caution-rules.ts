@@ -33,8 +33,11 @@ import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
 import { prohibitedFood } from './rules/r37-prohibited-in-food.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
+import { reentry } from './rules/r40-reentry.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
+import { itraconazoleBulk } from './rules/r43-itraconazole-bulk.ts'
+import { antiInflammatories } from './rules/r44-anti-inflammatories.ts'
 import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
 import { plannedTime } from './rules/r48-planned-time.ts'
 import { lineConditions } from './rules/r49-line-conditions.ts'
@@ -76,8 +79,11 @@ export const cautionRules: readonly CautionRule[] = [
   lot,
   prohibitedFood,
   secondCalculation,
+  reentry,
   weakAnimals,
   firstUse,
+  itraconazoleBulk,
+  antiInflammatories,
   beyondEveryLine,
   plannedTime,
   lineConditions,

@@ -105,6 +105,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
     isBuffered: anyFact(fc.boolean()),
+    isAired: anyFact(fc.boolean()),
     spacing: anyFact(
       fc.record({
         intervalHours: fc.constantFrom(0, 6, 24, 48, Number.NaN),
@@ -176,10 +177,12 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     beyondUseOn: anyFact(date),
     status: anyFact(fc.constantFrom('usable' as const, 'recalled' as const, 'quarantined' as const)),
     storageFault: anyFact(fc.boolean()),
+    isFromBulk: anyFact(fc.boolean()),
     densityGPerMl: anyFact(figure),
   }),
   history: fc.record({
     agentUses: anyFact(fc.array(use, { maxLength: 3 })),
+    animalUses: anyFact(fc.array(use, { maxLength: 3 })),
     givenInLast24hMgPerL: anyFact(figure),
     reducerInUse: anyFact(fc.boolean()),
   }),

@@ -190,6 +190,7 @@ describe('the list of rules', () => {
     expect(cautionRules.filter(({ overridable }) => !overridable).map(({ id }) => id)).toEqual([
       'R08',
       'R27',
+      'R37',
       'R47',
     ])
   })

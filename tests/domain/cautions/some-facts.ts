@@ -77,6 +77,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       changedSinceLastCalculation: known(false),
       copperCourse: known('not-started'),
       isBuffered: known(true),
+      isAired: known(true),
       spacing: known({
         intervalHours: 24,
         lastGivenAt: null,
@@ -139,10 +140,12 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       beyondUseOn: notApplicable(),
       status: known('usable'),
       storageFault: known(false),
+      isFromBulk: known(false),
       densityGPerMl: notApplicable(),
     },
     history: {
       agentUses: known([]),
+      animalUses: known([]),
       givenInLast24hMgPerL: known(0),
       reducerInUse: known(false),
     },
