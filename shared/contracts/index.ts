@@ -1,5 +1,6 @@
 import type { Contract } from './contract.ts'
 import * as acquisitions from './acquisitions.contract.ts'
+import * as adverseEvents from './adverse-events.contract.ts'
 import * as animalRecords from './animal-records.contract.ts'
 import * as animals from './animals.contract.ts'
 import * as audit from './audit.contract.ts'
@@ -49,6 +50,7 @@ const modules = [
   formulary,
   cautionRules,
   orders,
+  adverseEvents,
   doses,
   taxa,
   animals,

@@ -48,6 +48,10 @@ export const sources = {
     citation: 'Bunting et al. 2009, Journal of Zoo and Wildlife Medicine 40(3): itraconazole in penguins',
     mark: 'V',
   },
+  'cfr-530-3': {
+    citation: '21 CFR 530.3(i)(3), follow-up of an adverse reaction; read in the text of March 2024',
+    mark: 'V',
+  },
   'cfr-530-41': {
     citation: '21 CFR 530.41, drugs prohibited for extralabel use in food animals; read in the 2015 edition',
     mark: 'V',

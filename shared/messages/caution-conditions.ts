@@ -29,4 +29,5 @@ export const cautionConditions = defineMessages({
   R40: (p) =>
     `Room aired, or nobody in it without protection for ${counted(p.minutes, 'minute', 'minutes')} after it goes in`,
   R41: (p) => `At most ${p.limitPercent} % of the animals moribund or not eating, none handled within a day`,
+  R46: () => 'Every adverse event of this order reviewed by a veterinarian',
 } satisfies Record<StartRuleId, (params: ConditionParams) => string>)

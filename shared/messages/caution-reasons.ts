@@ -43,6 +43,7 @@ export const cautionReasonWords = defineMessages({
   R42: 'Labels and circulars ask for a trial on a few animals where a species has no experience of the drug.',
   R43: 'Of 30 samples after itraconazole from bulk powder 26 held none that could be measured.',
   R44: 'Together they harm kidneys and gut more than either does.',
+  R46: 'The veterinarian who ordered it follows up an adverse reaction before anything more is given.',
   R47: 'A figure beyond every published range for the drug is a slip, and not a decision.',
   R48: 'A plan far ahead, long, or blind to earlier doses is decided for animals and water that will be others by then.',
   R49: 'A range holds for the water and the contact time that it was published for.',

@@ -38,6 +38,8 @@ export const moreCautionTitles = {
   'itraconazole-source-unknown': 'Where this itraconazole comes from is not known',
   'animal-uses-unknown': 'Other drugs of these animals are not known',
   'anti-inflammatories-together': 'Anti-inflammatories too close together',
+  'adverse-event-open': 'An adverse event waits for a veterinarian',
+  'adverse-events-unknown': 'Adverse events of the order are not known',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -93,4 +95,8 @@ export const moreCautionTexts = {
     'What else these animals are given is not known, so anti-inflammatories that must not meet can’t be told apart.',
   'anti-inflammatories-together': (p) =>
     `Order ${p.orderNumber} gives ${p.agent} to these animals less than ${hours(p.limitHours)} away. Together they harm kidneys and gut.`,
+  'adverse-event-open': (p) =>
+    `Seen at ${p.seenAt} under this order: ${p.seen}. Nothing more is given until a veterinarian has reviewed it; nobody can override that.`,
+  'adverse-events-unknown': () =>
+    'Whether anything went wrong under this order is not known. Nothing more is given until it is.',
 } satisfies Partial<CautionTexts>

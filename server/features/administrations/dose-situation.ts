@@ -18,7 +18,7 @@ import type { Db } from '../../platform/database/db.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { Animals } from '../animals/index.ts'
 import { placeReads } from '../enclosures/index.ts'
-import { saidAnimal } from '../orders/index.ts'
+import { readOpenAdverseEvents, saidAnimal } from '../orders/index.ts'
 import type { EventReadRow, OrderQueries, Orders, SignedOrder } from '../orders/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { readDoses, stands } from './administrations.reads.ts'
@@ -204,7 +204,9 @@ export async function readDoseSituation(
     : null
   const judgement = found?.judgement ?? null
   const settings = found?.settings ?? {}
-  const facts = judgement && withSpacing(judgement.facts, content, records)
+  const openAdverseEvents = known(await readOpenAdverseEvents(db, sealed.row.id, at), null, 'the order')
+  const spaced = judgement && withSpacing(judgement.facts, content, records)
+  const facts = spaced && { ...spaced, order: { ...spaced.order, openAdverseEvents } }
   const volumeNow = found?.situation.water.volume?.netVolumeLitres ?? null
   const drift =
     volumeNow === null

@@ -30,6 +30,8 @@ import { readSituation } from './order-situation.ts'
 import { createCourseReporter } from './report-course.ts'
 import type { FacilityDate } from '../../../shared/domain/time/instant.ts'
 import { readWithdrawalHold } from './withdrawal-holds.ts'
+import { AdverseEventReviewRow, AdverseEventRow } from './adverse-event.entity.ts'
+import { createAdverseEvents } from './adverse-events.ts'
 import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
 import { createOrdersService } from './orders.service.ts'
@@ -51,9 +53,18 @@ export { sayRounding } from './say-rounding.ts'
 export { saidAnimal } from './preview-order.ts'
 export type { SignedOrder } from './order-content.ts'
 export type { OpenOrder, OrderWork, OrdersAtWork } from './order-work.ts'
+export { readOpenAdverseEvents } from './adverse-events.ts'
 export type { EventReadRow } from './orders.reads.ts'
 export type { BathFactsReader } from './bath-facts.ts'
-export const orderEntities = [OrderHead, OrderVersion, OrderVersionAnimal, OrderEventRow, AgentExperience]
+export const orderEntities = [
+  OrderHead,
+  OrderVersion,
+  OrderVersionAnimal,
+  OrderEventRow,
+  AgentExperience,
+  AdverseEventRow,
+  AdverseEventReviewRow,
+]
 
 export interface OrdersOutside extends Parts {
   facility: FacilityService
@@ -136,17 +147,20 @@ export function createOrders(parts: OrdersOutside) {
         asked,
         db,
       ),
-    routes: orderRoutes({
-      service,
-      queries,
-      situation,
-      askBench: parts.askBench,
-      now,
-      noteAmountsSeen,
-      noteAmountsPreviewed,
-      print,
-      printLabel,
-    }),
+    routes: [
+      ...createAdverseEvents(parts).routes,
+      ...orderRoutes({
+        service,
+        queries,
+        situation,
+        askBench: parts.askBench,
+        now,
+        noteAmountsSeen,
+        noteAmountsPreviewed,
+        print,
+        printLabel,
+      }),
+    ],
   }
 }
 

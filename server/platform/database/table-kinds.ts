@@ -54,6 +54,8 @@ export const tableKinds: Record<string, TableKind> = {
   dose_voids: 'ledger',
   dose_overrides: 'sealed',
   agent_experience: 'ledger',
+  adverse_events: 'ledger',
+  adverse_event_reviews: 'ledger',
   products: 'draft',
   product_lots: 'ledger',
   lot_events: 'ledger',

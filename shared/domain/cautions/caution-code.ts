@@ -172,6 +172,8 @@ export interface CautionParams {
   'itraconazole-source-unknown': Record<never, never>
   'animal-uses-unknown': Record<never, never>
   'anti-inflammatories-together': { orderNumber: string; agent: AgentCode; limitHours: number }
+  'adverse-event-open': { seenAt: string; seen: readonly string[] }
+  'adverse-events-unknown': Record<never, never>
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -257,6 +259,7 @@ export type ResolveCode =
   | 'say-whether-biofilter'
   | 'air-the-room'
   | 'keep-people-out'
+  | 'review-adverse-event'
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'

@@ -62,6 +62,12 @@ export interface WeightFact {
   plausible: boolean | null
 }
 
+/** Something that went wrong under an order, and that no veterinarian has reviewed. */
+export interface OpenAdverseEvent {
+  seen: string
+  at: Instant
+}
+
 /** Which animals may be eaten or set free, and of which nobody said; of the others somebody said that they are not. */
 export interface FoodOrRelease {
   yes: readonly NamedAnimal[]
@@ -145,6 +151,8 @@ export interface CautionFacts {
     copperCourse: Fact<'not-started' | 'ramp' | 'hold'>
     /** Bicarbonate goes into the bath with tricaine. */
     isBuffered: Fact<boolean>
+    /** Of this order, the earliest first. */
+    openAdverseEvents: Fact<readonly OpenAdverseEvent[]>
     /** Out of doors, or in a room whose air is changed. */
     isAired: Fact<boolean>
     spacing: Fact<DoseSpacing>

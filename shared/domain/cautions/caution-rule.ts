@@ -52,6 +52,7 @@ export const cautionRuleIds = [
   'R42',
   'R43',
   'R44',
+  'R46',
   'R47',
   'R48',
   'R49',
@@ -82,6 +83,7 @@ export const startRuleIds = [
   'R39',
   'R40',
   'R41',
+  'R46',
 ] as const
 export type StartRuleId = (typeof startRuleIds)[number]
 

@@ -38,6 +38,7 @@ import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
 import { itraconazoleBulk } from './rules/r43-itraconazole-bulk.ts'
 import { antiInflammatories } from './rules/r44-anti-inflammatories.ts'
+import { adverseEvent } from './rules/r46-adverse-event.ts'
 import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
 import { plannedTime } from './rules/r48-planned-time.ts'
 import { lineConditions } from './rules/r49-line-conditions.ts'
@@ -84,6 +85,7 @@ export const cautionRules: readonly CautionRule[] = [
   firstUse,
   itraconazoleBulk,
   antiInflammatories,
+  adverseEvent,
   beyondEveryLine,
   plannedTime,
   lineConditions,

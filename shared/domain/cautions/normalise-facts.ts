@@ -7,6 +7,7 @@ type SignedFacts = Omit<CautionFacts, 'route'> & Partial<Pick<CautionFacts, 'rou
 /** Facts that orders were signed without before a rule asked for them: nobody said, which is unknown. */
 export const askedLater = [
   'order.isBuffered',
+  'order.openAdverseEvents',
   'order.isAired',
   'lot.isFromBulk',
   'history.animalUses',

@@ -126,6 +126,8 @@ export function orderFacts(
       dosesStillIn: known(draft.given.stillIn, null, 'the order'),
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
+      // those of an order that is being given are read beside its doses
+      openAdverseEvents: known([], null, 'the order'),
       isBuffered: orUnknown(said.isBuffered ?? null, stated),
       isAired: orUnknown(said.isAired ?? null, stated),
       spacing:

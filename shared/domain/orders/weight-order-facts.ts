@@ -65,6 +65,7 @@ export function weightOrderFacts(
       dosesStillIn: notApplicable(),
       changedSinceLastCalculation: known(false, null, order),
       copperCourse: notApplicable(),
+      openAdverseEvents: known([], null, order),
       isBuffered: notApplicable(),
       isAired: notApplicable(),
       spacing:

@@ -83,6 +83,8 @@ export const permissions = {
   'dose.record': row('yes', 'yes', 'yes', 'no', 'no'),
   'dose.strike': row('yes', 'own-record-of-the-day', 'own-record-of-the-day', 'no', 'no'),
   'dose.calculate-second': row('another-person', 'another-person', 'another-person', 'no', 'no'),
+  'adverse-event.record': row('yes', 'yes', 'yes', 'no', 'no'),
+  'adverse-event.review': row('yes', 'no', 'no', 'no', 'no'),
   'stock.manage': row('yes', 'yes', 'no', 'no', 'no'),
   'lot.return': row('yes', 'another-person', 'no', 'no', 'no'),
   'stock.controlled': row('yes', 'named-for-controlled-drugs', 'no', 'no', 'no'),

@@ -14,6 +14,7 @@ import { ButtonLink } from '../../ui/button-link.tsx'
 import { PhoneSheet } from '../../ui/phone-frame.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { AdverseEvents } from '../orders/index.ts'
 import { DosePicker } from './dose-picker.tsx'
 import { FirstCalculation, SecondStanding } from './first-calculation.tsx'
 import { GiveForm } from './give-form.tsx'
@@ -159,6 +160,7 @@ export function WholeSheet({
         ) : null}
         <SignedOverrides sheet={sheet} zone={zone} />
         <RecordedDoses sheet={sheet} zone={zone} />
+        <AdverseEvents number={sheet.number} doseKey={sheet.key} zone={zone} />
         {running ? <DosePicker sheet={sheet} zone={zone} /> : null}
         <div className="row row-wrap">
           {sheet.may.includes('dose.record') ? (

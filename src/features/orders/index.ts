@@ -1,3 +1,4 @@
+export { AdverseEvents } from './adverse-events.tsx'
 export { OrdersList, ordersAsked } from './orders-list.tsx'
 export { OrderForm } from './order-form.tsx'
 export { orderTitle, SignedOrder, UnsignedOrder } from './order-view.tsx'

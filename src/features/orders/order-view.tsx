@@ -16,6 +16,7 @@ import { Cartouche } from '../../ui/cartouche.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { AmountsNow } from './amounts-now.tsx'
+import { AdverseEvents } from './adverse-events.tsx'
 import { OrderBench } from './carried-order.tsx'
 import { DoseCalendar } from './dose-calendar.tsx'
 import { DoseText } from './dose-text.tsx'
@@ -258,6 +259,7 @@ export function SignedOrder({
           <OrderActs order={order} version={version.versionNo} />
           <OrderVersions order={order} shown={version.versionNo} zone={zone} />
           <OrderHistory order={order} zone={zone} />
+          <AdverseEvents number={order.number} doseKey={null} zone={zone} />
         </div>
       </Area>
     </Sheet>

@@ -105,6 +105,9 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
     isBuffered: anyFact(fc.boolean()),
+    openAdverseEvents: anyFact(
+      fc.array(fc.record({ seen: fc.constant('Gasping at the surface'), at: instant }), { maxLength: 2 }),
+    ),
     isAired: anyFact(fc.boolean()),
     spacing: anyFact(
       fc.record({

@@ -101,3 +101,24 @@ describe('R43: itraconazole from bulk powder', () => {
     expect(found(known(true), 'voriconazole')).toEqual([])
   })
 })
+
+describe('R46: an adverse event that no veterinarian has reviewed', () => {
+  const event = { seen: 'Gasping at the surface', at: '2026-05-14T13:00:00Z' }
+  const facts = (openAdverseEvents: CautionFacts['order']['openAdverseEvents']) =>
+    someFacts('praziquantel', { value: 2, unit: 'mg/L', basis: 'active' }, { order: { openAdverseEvents } })
+  it('stops the next dose, and nobody overrides it; the order under which nothing happened has no such step', () => {
+    const [found] = cautions(facts(known([event])), 'start')
+    expect(found).toMatchObject({ code: 'adverse-event-open', level: 'stop', overridable: false })
+    expect(found && sayCaution(found, 'UTC').text).toContain('Gasping at the surface')
+    expect(firedBy('R46', facts(unknown()), 'start')).toEqual(['stop adverse-events-unknown'])
+    expect(firedBy('R46', facts(known([])), 'start')).toEqual([])
+    const conditions = (of: CautionFacts) =>
+      evaluateCautions({ facts: of, stage: 'design' }).conditions.map(({ ruleId }) => ruleId)
+    expect(conditions(facts(known([])))).not.toContain('R46')
+    expect(conditions(facts(known([event])))).toContain('R46')
+  })
+  it('is asked by whatever route', () =>
+    expect(firedBy('R46', { ...facts(known([event])), route: 'injection' }, 'start')).toEqual([
+      'stop adverse-event-open',
+    ]))
+})

@@ -77,6 +77,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       changedSinceLastCalculation: known(false),
       copperCourse: known('not-started'),
       isBuffered: known(true),
+      openAdverseEvents: known([]),
       isAired: known(true),
       spacing: known({
         intervalHours: 24,
