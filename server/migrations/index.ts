@@ -32,6 +32,7 @@ import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
 import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
 import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
 import { WeakAndHandled1764600000053 } from './0053-weak-and-handled.ts'
+import { LicencesAndSigningLocks1764600000055 } from './0055-licences-and-signing-locks.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -70,4 +71,5 @@ export const migrations = [
   StandingLockLifts1764600000051,
   LiftsOneByOne1764600000052,
   WeakAndHandled1764600000053,
+  LicencesAndSigningLocks1764600000055,
 ]

@@ -37,6 +37,7 @@ beforeAll(async () => {
   })
   await app.composition.people.service.enterLicence({ actor: installation, requestId: 'test' }, late.id, {
     id: app.nextId(),
+    class: 'veterinary',
     jurisdiction: 'Norrell Sound',
     number: 'VL-19002',
     validFrom: '2020-01-01',

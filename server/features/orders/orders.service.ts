@@ -42,6 +42,7 @@ export interface OrdersParts extends SituationParts {
 }
 
 export interface SignRequest {
+  licenceId?: string | undefined
   password: string
   expectedVersion: number
   read: AnsweredCaution[]
@@ -189,6 +190,7 @@ export function createOrdersService(parts: OrdersParts) {
         'order.sign',
         request.password,
         parts.clock.now(),
+        { licenceId: request.licenceId },
       )
       return parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)

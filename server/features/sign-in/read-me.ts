@@ -1,3 +1,4 @@
+import { lastDayOf } from '../../../shared/domain/licences/licence-classes.ts'
 import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import type { SignedIn } from '../../platform/http/guard.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -16,8 +17,8 @@ export function createMeReader(parts: {
 }): MeReader {
   return async (signedIn) => {
     const { people, facility } = parts
-    const person = await people.queries.person(signedIn.personId)
-    const licences = person.licences.filter((licence) => licence.state !== 'void')
+    const person = await people.personAsSignedIn(signedIn.personId)
+    const licences = person.licences.filter(({ state }) => state !== 'void' && state !== 'superseded')
     return {
       id: person.id,
       email: person.email,
@@ -25,13 +26,19 @@ export function createMeReader(parts: {
       roles: person.roles,
       mustChangePassword: signedIn.mustChangePassword,
       licences: licences.map((licence) => ({
+        id: licence.id,
+        class: licence.class,
         jurisdiction: licence.jurisdiction,
         number: licence.number,
         validFrom: licence.validFrom,
         validUntil: licence.validUntil,
+        lastDay: lastDayOf({ validUntil: licence.validUntil, endedOn: licence.ended?.on ?? null }),
+        state: licence.state,
+        warning: licence.warning,
         validToday: licence.state === 'valid',
       })),
       mayPractise: person.roles.includes('veterinarian') && person.licenceState === 'valid',
+      signingLockedUntil: person.signingLockedUntil,
       preferences: await people.readPreferences(person.id),
       facility: {
         name: await facility.valueOf('facility.name'),
