@@ -6,6 +6,7 @@ import { createAnimals } from './features/animals/index.ts'
 import { createAudit } from './features/audit/index.ts'
 import { createEnclosures } from './features/enclosures/index.ts'
 import { createBench } from './features/bench/index.ts'
+import { createCautions } from './features/cautions/index.ts'
 import { createCounterparties } from './features/counterparties/index.ts'
 import { createDocuments } from './features/documents/index.ts'
 import { createExports } from './features/exports/index.ts'
@@ -67,6 +68,7 @@ export function compose(outside: Outside) {
   const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
   const signer = createSigner(path.join(outside.dataFolder, 'keys'))
   const signing = createSigning({ ...parts, signer, facility: facility.service, people })
+  const cautions = createCautions({ ...parts, facility: facility.service, signing: signing.service })
   const enclosures = createEnclosures(parts)
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
@@ -99,9 +101,11 @@ export function compose(outside: Outside) {
     facility: facility.service,
     signing: signing.service,
     formulary,
+    cautions,
     water,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
   })
   const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
@@ -112,6 +116,7 @@ export function compose(outside: Outside) {
     orders,
     animals,
     documents,
+    publicUrl: outside.publicUrl ?? '',
   })
   const handover = createHandover(parts)
   const bench = createBench({ ...parts, facility: facility.service })
@@ -136,6 +141,7 @@ export function compose(outside: Outside) {
     facility,
     people,
     signing,
+    cautions,
     enclosures,
     water,
     formulary,
@@ -159,6 +165,7 @@ export function compose(outside: Outside) {
       ...enclosures.routes,
       ...water.routes,
       ...formulary.routes,
+      ...cautions.routes,
       ...animals.routes,
       ...documents.routes,
       ...counterparties.routes,

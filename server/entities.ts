@@ -3,6 +3,7 @@ import { orderEntities } from './features/orders/index.ts'
 import { acquisitionEntities } from './features/acquisitions/index.ts'
 import { animalEntities } from './features/animals/index.ts'
 import { enclosureEntities } from './features/enclosures/index.ts'
+import { cautionEntities } from './features/cautions/index.ts'
 import { counterpartyEntities } from './features/counterparties/index.ts'
 import { documentEntities } from './features/documents/index.ts'
 import { exportEntities } from './features/exports/index.ts'
@@ -28,6 +29,7 @@ export const entities = [
   ...enclosureEntities,
   ...waterEntities,
   ...formularyEntities,
+  ...cautionEntities,
   ...animalEntities,
   ...documentEntities,
   ...counterpartyEntities,

@@ -25,6 +25,7 @@ export type DemoActors = Record<DemoPerson, Actor & { personId: string }>
 
 const facilitySettings = {
   'facility.name': 'Harrow Point Sea Hall',
+  'facility.address': '4 Breakwater Road, Harrow Point, Norrell Sound',
   'facility.zone': 'America/Halifax',
   'facility.jurisdictions': 'Norrell Sound',
   'facility.gallon': 'us',

@@ -302,6 +302,18 @@ export const discontinueOrder = contract({
   idempotent: 'by-key',
 })
 
+export const printOrderLabel = contract({
+  id: 'printOrderLabel',
+  method: 'get',
+  path: '/orders/:number/label',
+  action: 'order.print',
+  summary: 'The label for a container of what is dispensed under an order, as PDF; it tells no amount',
+  params: orderParams,
+  reply: { 200: z.string().describe('PDF') },
+  problems: ['not-found', 'broken-record', 'print-busy', 'print-failed'],
+  produces: 'pdf',
+})
+
 export const printOrder = contract({
   id: 'printOrder',
   method: 'get',

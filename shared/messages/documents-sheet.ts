@@ -57,5 +57,6 @@ export const checkWords = defineMessages({
   'acquisition-history': 'Acquisition history',
   'treatment-order': 'Treatment order',
   'bath-sheet': 'Bath sheet',
+  'order-label': 'Label',
   clearance: 'Clearance certificate',
 })

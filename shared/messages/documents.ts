@@ -15,6 +15,8 @@ export const documentWords = defineMessages({
     `controlled-substance registration ${number}, valid to ${until}`,
   licence: ({ number, until }: { number: string; until: string }) => `licence ${number}, valid to ${until}`,
   fingerprintInFull: 'Record check in full',
+  scanToCheck: 'Is this paper still current?',
+  lookUp: ({ address }: { address: string }) => `Looked up at ${address}`,
   printed: ({ at, by }: { at: string; by: string }) => `Printed ${at}, by ${by}.`,
   laterVersion: 'A later version may exist.',
   notSigned: 'Not signed',

@@ -39,6 +39,14 @@ export const doseRefusals = defineMessages({
   'too-little-to-measure': (p) =>
     `The amount is less than ${p.said('least')} ${p.unit}, too little for this balance or measure. ` +
     'Choose a finer one, or make a stock solution.',
+  'amount-of-other-kind': () => 'Give a liquid by volume and a powder or tablet by weight.',
+  'below-half-step': (p) =>
+    'The amount is less than half of the smallest step of this syringe or balance. Take a finer one' +
+    (p.said('parts') === ''
+      ? '.'
+      : `, or thin the product to 1 in ${p.said('parts')} with a diluent that its label names.`),
+  'place-below-step': () =>
+    'The largest amount for one place is less than one step of this syringe. Check both figures.',
   'reading-at-or-above-target': () => 'The reading is at or above the target. Nothing is to be added.',
   'reading-not-comparable': () =>
     'A target in microlitres per litre has no reading. Give the target in mg/L.',

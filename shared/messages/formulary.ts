@@ -19,6 +19,16 @@ export const agentNames = defineMessages({
   metronidazole: 'metronidazole',
   oxytetracycline: 'oxytetracycline hydrochloride',
   fenbendazole: 'fenbendazole',
+  enrofloxacin: 'enrofloxacin',
+  florfenicol: 'florfenicol',
+  ceftazidime: 'ceftazidime',
+  itraconazole: 'itraconazole',
+  voriconazole: 'voriconazole',
+  butorphanol: 'butorphanol',
+  ketamine: 'ketamine',
+  meloxicam: 'meloxicam',
+  ketoprofen: 'ketoprofen',
+  dexamethasone: 'dexamethasone',
 } satisfies Record<AgentCode, string>)
 
 export const doseUses = defineMessages({

@@ -3,6 +3,8 @@ import { counted, defineMessages } from './define-messages.ts'
 /** Words of the form of a treatment order. */
 export const orderFormWords = defineMessages({
   newTitle: 'New order',
+  copied: (p: { number: string }) =>
+    `Begun as ${p.number}. Animals, lot, first dose, use and whatever was stated then are open: choose them anew.`,
   newSource: 'Nothing is chosen for you. Amounts are worked out by the water that is there now.',
   editSource: 'A draft. It binds nobody until it is signed.',
   amendSource: (p: { n: number }) =>

@@ -171,6 +171,9 @@ export const orderViewWords = defineMessages({
 
   acts: 'What can be done',
   print: 'Print as PDF',
+  copy: 'Write one like it',
+  printLabel: 'Label for the container',
+  labelNotIntact: 'There is no label of an order that is not what was signed.',
   amend: 'Amend',
   hold: 'Hold this order',
   holdReason: 'Why, if there is time to say so',

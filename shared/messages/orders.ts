@@ -48,6 +48,8 @@ export const figureChanged = defineMessages({
 
 /** Why an order is refused, and what to do. */
 export const orderProblemWords = defineMessages({
+  noLabel:
+    'This order is not what was signed, so there is no label for it. Tell a veterinarian and the administrator.',
   versionGone:
     'This order was signed, and the signed version is not in the database any more. Do not dose; tell the administrator.',
   veterinariansDraft:

@@ -22,6 +22,7 @@ import {
 import { counted } from './define-messages.ts'
 import { agentNames } from './formulary.ts'
 import { sayDate, sayInstant } from './say-date.ts'
+import { sayLoosened, sayLoosenedInShort } from './say-parameter.ts'
 
 /** A caution in words, as on screen and in print. */
 export interface SaidCaution {
@@ -36,7 +37,7 @@ export function sayCaution(caution: Caution, zone: string): SaidCaution {
   const text = cautionTexts[caution.code] as (params: Record<string, string | number>) => string
   return {
     title: cautionTitles[caution.code],
-    text: text(sayParams(caution.params, zone)),
+    text: [text(sayParams(caution.params, zone)), ...sayLoosened(caution.settings)].join(' '),
     resolves: caution.resolvedBy.map((code) => resolveWords[code]),
   }
 }
@@ -46,7 +47,7 @@ export function sayCondition(condition: CautionCondition, zone: string): string 
   const id = startRuleIds.find((one): one is StartRuleId => one === condition.ruleId)
   if (id === undefined) return cautionRuleWords[condition.ruleId]
   const sentence = cautionConditions[id] as (params: Record<string, string | number>) => string
-  return sentence(sayParams(condition.params, zone))
+  return `${sentence(sayParams(condition.params, zone))}${sayLoosenedInShort(condition.settings)}`
 }
 
 function sayParams(params: object, zone: string): Record<string, string | number> {

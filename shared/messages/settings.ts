@@ -4,6 +4,7 @@ import { defineMessages } from './define-messages.ts'
 
 export const settingNames = defineMessages({
   'facility.name': 'Name of the facility',
+  'facility.address': 'Address of the facility',
   'facility.zone': 'Time zone',
   'facility.jurisdictions': 'Jurisdictions whose licences are accepted',
   'facility.paper': 'Paper',
@@ -17,6 +18,7 @@ export const settingNames = defineMessages({
 
 export const settingHints = defineMessages({
   'facility.name': 'Printed at the head of every document.',
+  'facility.address': 'Printed on the label of what is dispensed, under the name of the veterinarian.',
   'facility.zone':
     'A zone of the IANA list, for example America/Halifax. Quarantine days are calendar dates in it.',
   'facility.jurisdictions': 'Separate several with commas, as written on the licences.',

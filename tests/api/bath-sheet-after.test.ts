@@ -109,6 +109,7 @@ describe('a bath sheet with many cautions', () => {
         block: version.signature,
         notice: null,
         facility: 'Harrow Point Sea Hall',
+        publicUrl: 'https://records.example',
         paper: 'a4',
         printedBy: 'S. Brandt',
         printedAt: '2026-12-01T18:20:00.000Z',

@@ -182,6 +182,20 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     await picture(page, `order-broken-${String(size.width)}`)
   })
 
+  it('is written like an earlier one, with everything open that was true only then', async () => {
+    const page = await signedIn('technician', size, `/orders/${numbers.signed}`)
+    await page.getByRole('link', { name: 'Write one like it' }).click()
+    await page.getByText(`Begun as ${numbers.signed}.`).waitFor()
+    expect(await page.getByLabel('Target in the water', { exact: true }).inputValue()).toBe('2')
+    expect(await page.getByLabel('First dose').inputValue()).toBe('')
+    const animals = page.getByRole('checkbox', { name: /Yellow tang/ })
+    await animals.first().waitFor()
+    expect(await animals.first().isChecked()).toBe(false)
+    expect(await page.getByRole('radio', { name: 'Extralabel' }).isChecked()).toBe(false)
+    await expectSound(page, 'an order like an earlier one')
+    await picture(page, `order-copied-${String(size.width)}`)
+  })
+
   it('is written by a veterinarian: judged while typed, a stop overridden, warnings read, signed', async () => {
     const page = await signedIn('veterinarian', size, '/orders/new')
     await page.getByRole('combobox', { name: 'Enclosure whose water is treated' }).fill('QT-4')

@@ -5,20 +5,20 @@ import type {
   PdfDocumentModel,
 } from '../../../shared/domain/documents/pdf-document-model.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
-import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { bathPaper } from '../../../shared/messages/bath-paper.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
-import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { restInTheWay, sayObstacle } from '../../../shared/messages/in-the-way.ts'
 import { orderPaper } from '../../../shared/messages/orders.ts'
 import { sayDoNotDose } from '../../../shared/messages/record-fault.ts'
-import { sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
+import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
+import { signedFrame } from '../../platform/pdf/signed-frame.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
-import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
+import { checkBlock } from '../../platform/pdf/check-block.ts'
+import { signatureEntry } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
 import { bathBlocks, calculationBlocks } from './bath-paper-records.ts'
 
@@ -32,6 +32,7 @@ export interface BathPaper {
   /** A state of the order that no page may hide; null when doses may be given from it. */
   notice: string | null
   facility: string
+  publicUrl: string
   paper: 'a4' | 'letter'
   printedBy: string
   printedAt: string
@@ -193,12 +194,10 @@ const aloneBlock = ({ sheet }: BathPaper): DocumentBlock[] => {
 /** One dose on paper for the tank: what to weigh and why, what has to be true, when to stop, and lines for the pen. */
 export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
   const { sheet, content, block } = paper
-  const short = formatFingerprint(block.hash)
   const notice = paper.notice ?? (sheet.why.length > 0 ? bathPaper.notReady : null)
   return {
     title: bathPaper.title({ number: sheet.number, dose: sheet.key }),
-    language: 'en',
-    paper: paper.paper,
+    ...signedFrame(paper, notice),
     head: {
       facility: paper.facility,
       name: bathPaper.name,
@@ -206,15 +205,6 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
       version: bathPaper.version({ n: sheet.versionNo, dose: sheet.key, doses: sheet.doses }),
       source: content.targetText.includes('L/L') ? orderPaper.sourceMicrolitres : orderPaper.source,
       subject: { name: sheet.enclosureCode, lines: [sheet.enclosureName, ...sheet.treated.slice(0, 3)] },
-    },
-    signers: [signerLine(block)],
-    ...(short.ok ? { recordCheck: short.value } : {}),
-    ...(notice === null ? {} : { notice }),
-    printed: {
-      by: paper.printedBy,
-      at: sayInstantWithOffset(paper.printedAt, block.zone),
-      atIso: paper.printedAt,
-      note: documentWords.laterVersion,
     },
     blocks: [
       {
@@ -266,7 +256,7 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           ...sheet.overrides.map(({ signature }) => signatureEntry(signature)),
         ],
       },
-      { kind: 'fingerprint', label: bathPaper.fingerprint, fingerprint: block.hash },
+      checkBlock(paper.publicUrl, block.hash, bathPaper.fingerprint),
       standingCaution(),
     ],
   }

@@ -2,6 +2,7 @@ import type { Product } from '../../../shared/contracts/formulary.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
+import type { CautionSettings } from '../../../shared/domain/cautions/caution-rule.ts'
 import { evaluateCautions } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import type { CautionAnswer } from '../../../shared/domain/cautions/evaluate-cautions.ts'
 import { checkDrift } from '../../../shared/domain/dose/check-drift.ts'
@@ -50,6 +51,8 @@ export interface DoseSituation {
   /** Which figures somebody changed past the program, in words; nothing is worked out from them. */
   changed: string[]
   answer: CautionAnswer | null
+  /** The facility's thresholds in force at that instant. */
+  settings: CautionSettings
   /** What the answer was judged by; null where nothing could be. */
   facts: CautionFacts | null
   /** The lot it was judged for: the one in the hand, or the one of the order. */
@@ -200,6 +203,7 @@ export async function readDoseSituation(
       })
     : null
   const judgement = found?.judgement ?? null
+  const settings = found?.settings ?? {}
   const facts = judgement && withSpacing(judgement.facts, content, records)
   const volumeNow = found?.situation.water.volume?.netVolumeLitres ?? null
   const drift =
@@ -223,6 +227,7 @@ export async function readDoseSituation(
     changed: found?.changed ?? [],
     facts,
     lotId,
+    settings,
     at: at.toISOString(),
     overrides:
       sealed.versionId === null
@@ -233,6 +238,7 @@ export async function readDoseSituation(
       evaluateCautions({
         facts,
         stage: 'start',
+        settings,
         factsAtSigning: content.facts as unknown as CautionFacts,
       }),
     drift: drift?.ok ? drift.value : null,

@@ -51,6 +51,7 @@ export function createAdministrations(
     animals: Animals
     documents: Documents
     pdf: PdfPool
+    publicUrl: string
     signing: SigningService
   },
 ) {

@@ -63,7 +63,7 @@ export function overrideFor(content: SignedOrder, caution: Caution): SignedOrder
   const facts = content.facts as unknown as CautionFacts | null
   if (!own || !facts) return null
   const told = JSON.stringify(caution.params)
-  const then = evaluateCautions({ facts, stage: 'design' }).cautions
+  const then = evaluateCautions({ facts, stage: 'design', settings: content.settings ?? {} }).cautions
   return then.some(
     (one) =>
       one.ruleId === caution.ruleId && one.code === caution.code && JSON.stringify(one.params) === told,

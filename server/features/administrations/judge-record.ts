@@ -136,6 +136,8 @@ export function exceptionsOf(
   if (row.phase === 'held') mark('while-held', 'warning', doseWords.whileHeld, doseWords.whileHeldText)
   if (block.state !== 'intact') mark('not-intact', 'stop', doseWords.underBroken, doseWords.underBrokenText)
   // what went in, and for whom, stands before what would have been asked for
-  const rules = judgement ? listExceptions(judgement.facts).map((caution) => saidForSheet(caution, zone)) : []
+  const rules = judgement
+    ? listExceptions(judgement.facts, situation.settings).map((caution) => saidForSheet(caution, zone))
+    : []
   return [...found, ...rules]
 }

@@ -20,6 +20,7 @@ export interface SheetPrintParts {
   pdf: PdfPool
   facility: FacilityService
   documents: DocumentsService
+  publicUrl: string
   sheetFor(
     context: RequestContext,
     number: string,
@@ -41,7 +42,8 @@ export function createSheetPrinter(parts: SheetPrintParts) {
       block,
       notice: orderNotice({ block, row, superseded: false, versionNo: content.versionNo }),
       facility: await parts.facility.valueOf('facility.name'),
-      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await parts.facility.paper(),
+      publicUrl: parts.publicUrl,
       printedBy: context.actor.printedName,
       printedAt,
     })

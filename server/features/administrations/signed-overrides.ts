@@ -37,12 +37,15 @@ export interface SignedOverride {
 
 /** The facts that a finding rests on, and the name of both together: other facts or another lot are another finding. */
 export function findingOf(
-  { ruleId, code }: Pick<Caution, 'ruleId' | 'code'>,
+  { ruleId, code, settings }: Pick<Caution, 'ruleId' | 'code' | 'settings'>,
   facts: CautionFacts,
   lotId: string | null,
 ): { finding: string; facts: Json } {
   const used = JSON.parse(JSON.stringify(factsOfRule(facts, ruleId))) as Json
-  return { finding: hashOf(canonicalJson({ ruleId, code, lotId, facts: used })), facts: used }
+  // another threshold of the facility makes it another finding; the defaults were never part of the name
+  const own = settings.filter(({ confirmed }) => confirmed !== null).map(({ key, value }) => ({ key, value }))
+  const named = { ruleId, code, lotId, facts: used, ...(own.length === 0 ? {} : { settings: own }) }
+  return { finding: hashOf(canonicalJson(named)), facts: used }
 }
 
 function fits(row: OverrideReadRow, content: OverrideContent | null): boolean {

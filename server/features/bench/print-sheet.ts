@@ -22,7 +22,7 @@ export function createSheetPrinter({ clock, pdf, facility }: SheetParts) {
       answer,
       facility: await facility.valueOf('facility.name'),
       zone: await facility.zone(),
-      paper: (await facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await facility.paper(),
       printedBy,
       printedAt: clock.now().toISOString(),
     })

@@ -51,7 +51,7 @@ export function createExportsService(parts: ExportsParts) {
         {
           facility: await facility.valueOf('facility.name'),
           zone: await facility.zone(),
-          paper: (await facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+          paper: await facility.paper(),
           printedBy: context.actor.printedName,
           printedAt,
           fingerprint,

@@ -4,6 +4,7 @@ import type { SettingRefusal } from '../../../shared/domain/settings/check-setti
 import { itemsOf } from '../../../shared/domain/settings/list-items.ts'
 import { settingKeys, settings } from '../../../shared/domain/settings/settings.ts'
 import type { SettingKey } from '../../../shared/domain/settings/settings.ts'
+import type { Paper } from '../../../shared/domain/documents/pdf-document-model.ts'
 import { facilityDateOf } from '../../../shared/domain/time/facility-date.ts'
 import { settingDetails, settingNames, settingRefusals } from '../../../shared/messages/settings.ts'
 import type { Setting } from '../../../shared/contracts/facility.contract.ts'
@@ -63,6 +64,8 @@ export function createFacilityService(parts: FacilityParts) {
 
   return {
     valueOf,
+    /** The paper that documents are laid out for. */
+    paper: async (): Promise<Paper> => ((await valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4'),
     async listSettings(): Promise<Setting[]> {
       const rows = await parts.readVersions()
       return settingKeys.map((key) =>

@@ -118,6 +118,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
           withoutExperience: newTaxa
             ? known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here')
             : unknown(),
+          weights: notApplicable(),
         },
         volume: { determination: volumeFact(water) },
         lifeSupport: {

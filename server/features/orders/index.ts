@@ -6,6 +6,7 @@ import { Problem } from '../../platform/http/problem.ts'
 import type { Parts } from '../../platform/parts.ts'
 import type { PdfPool } from '../../platform/pdf/pdf-pool.ts'
 import type { Animals } from '../animals/index.ts'
+import type { Cautions } from '../cautions/index.ts'
 import type { Documents } from '../documents/index.ts'
 import { placeReads } from '../enclosures/index.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -30,6 +31,7 @@ import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
 import { createOrdersService } from './orders.service.ts'
 import { createOrderPrinter, orderPrintKind } from './print-order.ts'
+import { createLabelPrinter, labelPrintKind } from './print-label.ts'
 import { answerForOrderPrints } from './print-state.ts'
 
 export { readKnown } from './knowers.reads.ts'
@@ -53,10 +55,13 @@ export interface OrdersOutside extends Parts {
   facility: FacilityService
   signing: SigningService
   formulary: Formulary
+  cautions: Cautions
   water: Water
   animals: Animals
   documents: Documents
   pdf: PdfPool
+  /** Where people reach this installation, for codes on paper. */
+  publicUrl: string
   treatments: TreatmentsService
 }
 
@@ -73,6 +78,7 @@ export function createOrders(parts: OrdersOutside) {
   const situation = {
     dataSource,
     facts,
+    settingsAt: parts.cautions.settingsAt,
     product: (id: string) => formulary.queries.product(id),
     doseLine: (id: string) => formulary.queries.doseLine(id),
     doseLinesOf: (agent: AgentCode) => formulary.queries.doseLinesOf(agent),
@@ -89,8 +95,10 @@ export function createOrders(parts: OrdersOutside) {
   const noteAmountsSeen = createAmountsSeen({ ...parts, queries })
   const noteAmountsPreviewed = createAmountsPreviewed({ ...parts, noteAmountsSeen })
   const print = createOrderPrinter({ ...parts, documents: documents.service, queries, noteAmountsSeen })
+  const printLabel = createLabelPrinter({ ...parts, documents: documents.service, queries })
   const answerForPrint = answerForOrderPrints(queries)
   documents.prints.answerFor(orderPrintKind, answerForPrint)
+  documents.prints.answerFor(labelPrintKind, answerForPrint)
   parts.animals.amounts.askOf(queries.blindAmong)
   /** Judges an order's fields by the facts of an instant; null where its water cannot be read any more. */
   const judge = (
@@ -119,6 +127,7 @@ export function createOrders(parts: OrdersOutside) {
       noteAmountsSeen,
       noteAmountsPreviewed,
       print,
+      printLabel,
     }),
   }
 }

@@ -1,6 +1,7 @@
 import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields, SaidCaution } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
+import type { CautionSettings } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { BathDose } from '../../../shared/domain/dose/bath-dose.ts'
 import type { SignedAnswer } from '../../../shared/domain/orders/signed-answers.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
@@ -54,6 +55,8 @@ export interface SignedOrder {
   conditions: ReturnType<typeof saidCondition>[]
   overrides: (SignedAnswer & { reason: string })[]
   read: (string | SignedAnswer)[]
+  /** The facility's thresholds that the cautions were judged by; orders signed earlier were judged by the defaults. */
+  settings?: CautionSettings
   facts: Json
 }
 
@@ -117,6 +120,7 @@ export function contentOf(request: ContentRequest): SignedOrder {
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,
     read: request.read,
+    settings: found.settings,
     facts: JSON.parse(JSON.stringify(judgement?.facts ?? null)) as Json,
   }
 }

@@ -8,7 +8,6 @@ import type { OrderRow } from '../../../shared/contracts/orders.contract.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
 import { isTextSound } from '../../../shared/domain/orders/is-text-sound.ts'
 import { exceptionsWithoutFigures } from '../../../shared/domain/dose/exceptions-without-figures.ts'
-import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { plannedDoses } from '../../../shared/domain/orders/planned-doses.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -18,7 +17,9 @@ import { doseWords } from '../../../shared/messages/doses.ts'
 import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
-import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
+import { checkBlock } from '../../platform/pdf/check-block.ts'
+import { signedFrame } from '../../platform/pdf/signed-frame.ts'
+import { signatureEntry } from '../../platform/pdf/signature-entry.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { workingBlock } from '../../platform/pdf/working-block.ts'
 import type { SignedOrder } from './order-content.ts'
@@ -35,6 +36,7 @@ export interface OrderPaper {
   recorded: readonly RecordedDoseRow[]
   superseded: boolean
   facility: string
+  publicUrl: string
   paper: 'a4' | 'letter'
   printedBy: string
   printedAt: string
@@ -309,14 +311,12 @@ const faultyStatements = ({ content }: OrderPaper): DocumentBlock[] => [
 /** A signed order on paper. Everything comes from the signed text, and the check of that text stands on every page. */
 export function orderDocument(paper: OrderPaper): PdfDocumentModel {
   const { content, block } = paper
-  const short = formatFingerprint(block.hash)
   const notice = orderNotice({ ...paper, versionNo: content.versionNo })
   const usesMicrolitres = content.targetText.includes('L/L')
   const treated = content.water.animals.filter((animal) => animal.treated)
   return {
     title: orderPaper.title({ number: content.number, n: content.versionNo }),
-    language: 'en',
-    paper: paper.paper,
+    ...signedFrame(paper, notice),
     head: {
       facility: paper.facility,
       name: orderWords.order,
@@ -328,20 +328,11 @@ export function orderDocument(paper: OrderPaper): PdfDocumentModel {
         lines: [content.enclosure.name, ...treated.slice(0, 3).map(sayTreated)],
       },
     },
-    signers: [signerLine(block)],
-    ...(short.ok ? { recordCheck: short.value } : {}),
-    ...(notice === null ? {} : { notice }),
-    printed: {
-      by: paper.printedBy,
-      at: sayInstantWithOffset(paper.printedAt, block.zone),
-      atIso: paper.printedAt,
-      note: documentWords.laterVersion,
-    },
     blocks: [
       ...faultBlocks(paper),
       ...(isTextSound(block.fault) ? statements(paper) : faultyStatements(paper)),
       { kind: 'signatures', entries: [signatureEntry(block)] },
-      { kind: 'fingerprint', label: documentWords.fingerprintInFull, fingerprint: block.hash },
+      checkBlock(paper.publicUrl, block.hash),
       standingCaution(),
     ],
   }

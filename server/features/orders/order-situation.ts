@@ -7,7 +7,7 @@ import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.t
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
 import { staysInWater } from '../../../shared/domain/formulary/dose-line.ts'
 import type { ConcentrationUnit, DefaultRange } from '../../../shared/domain/cautions/caution-facts.ts'
-import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
+import type { CautionSettings, CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
@@ -22,6 +22,8 @@ import type { BathFactsReader, BathSituation } from './bath-facts.ts'
 export interface SituationParts {
   dataSource: Db
   facts: BathFactsReader
+  /** The facility's confirmed thresholds as they were in force at an instant. */
+  settingsAt(at: Date, db?: Db): Promise<CautionSettings>
   product(id: string): Promise<Product>
   doseLine(id: string): Promise<DoseLine>
   /** The dose lines in force for an agent. */
@@ -34,6 +36,8 @@ export interface OrderSituation {
   product: Product | null
   line: DoseLine | null
   judgement: OrderJudgement | null
+  /** The facility's thresholds that it was judged by. */
+  settings: CautionSettings
   /** Which figures somebody changed past the program, in words; nothing is worked out from them. */
   changed: string[]
 }
@@ -197,6 +201,7 @@ export async function readSituation(
     lines,
     water: situation.water,
   })
+  const settings = await parts.settingsAt(at, options.db)
   const given = await readGivenBefore(options.db ?? parts.dataSource, options.exceptOrderId ?? null)
   const judgement =
     product && changed.length === 0
@@ -204,11 +209,11 @@ export async function readSituation(
           situation.base,
           draftOf(fields, given),
           chosenOf(product, line, lines, fields.lotId),
-          {},
+          settings,
           options.stage,
         )
       : null
-  return { situation, product, line, judgement, changed }
+  return { situation, product, line, judgement, settings, changed }
 }
 
 /** Fields that have to be filled before the order can be signed. */

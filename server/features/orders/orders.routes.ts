@@ -7,6 +7,7 @@ import type { NoteAmountsPreviewed, NoteAmountsSeen } from './amounts-seen.servi
 import { ordersCsvColumns } from './orders-csv.ts'
 import { readSituation, refuseUnfit } from './order-situation.ts'
 import type { SituationParts } from './order-situation.ts'
+import type { LabelPrinter } from './print-label.ts'
 import type { OrderQueries } from './orders.queries.ts'
 import type { OrdersService } from './orders.service.ts'
 import { presentPreview } from './preview-order.ts'
@@ -18,12 +19,14 @@ export interface OrderRouteParts {
   now(): Date
   noteAmountsSeen: NoteAmountsSeen
   noteAmountsPreviewed: NoteAmountsPreviewed
+  /** The PDF of the label of the version in force, and a note that it was printed. */
+  printLabel: LabelPrinter
   /** The PDF of a signed version, and a note that it was printed. */
   print(number: string, version: number | undefined, actor: Actor, requestId: string): Promise<Uint8Array>
 }
 
 export function orderRoutes(parts: OrderRouteParts): Route[] {
-  const { service, queries, situation, now, noteAmountsSeen, noteAmountsPreviewed, print } = parts
+  const { service, queries, situation, now, noteAmountsSeen, noteAmountsPreviewed, print, printLabel } = parts
   return [
     route(contracts.listOrders, ({ query }) => queries.list(query)),
     route(contracts.listOrdersCsv, async ({ query }) =>
@@ -65,6 +68,11 @@ export function orderRoutes(parts: OrderRouteParts): Route[] {
       await service.discontinueOrder(context, params.number, body.reason)
       return queries.order(params.number, context.actor)
     }),
+    route(contracts.printOrderLabel, async ({ params, context }) => ({
+      contentType: 'application/pdf',
+      fileName: `${params.number}-label.pdf`,
+      body: await printLabel(context, params.number),
+    })),
     route(contracts.printOrder, async ({ params, query, context }) => ({
       contentType: 'application/pdf',
       fileName: `${params.number}.pdf`,

@@ -20,6 +20,7 @@ export interface PrintParts {
   documents: DocumentsService
   queries: OrderQueries
   noteAmountsSeen: NoteAmountsSeen
+  publicUrl: string
 }
 
 /** Prints a signed version: checked now, noted with its fingerprint so that the paper can be looked up again. */
@@ -38,7 +39,8 @@ export function createOrderPrinter(parts: PrintParts) {
       recorded: sealed.recorded,
       superseded: sealed.superseded,
       facility: await parts.facility.valueOf('facility.name'),
-      paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+      paper: await parts.facility.paper(),
+      publicUrl: parts.publicUrl,
       printedBy: actor.printedName,
       printedAt: parts.clock.now().toISOString(),
     })

@@ -4,13 +4,13 @@ import type {
   PdfDocumentModel,
   RichText,
 } from '../../../shared/domain/documents/pdf-document-model.ts'
-import { formatFingerprint } from '../../../shared/domain/documents/format-fingerprint.ts'
 import { clearanceWords as words } from '../../../shared/messages/clearance.ts'
 import { sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { quarantineKindWords } from '../../../shared/messages/quarantine.ts'
-import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
-import { signatureEntry, signerLine } from '../../platform/pdf/signature-entry.ts'
+import { sayDate } from '../../../shared/messages/say-date.ts'
+import { signedFrame } from '../../platform/pdf/signed-frame.ts'
+import { signatureEntry } from '../../platform/pdf/signature-entry.ts'
 import type { ClearanceContent } from './clearance-content.ts'
 
 export interface ClearancePaper {
@@ -158,28 +158,17 @@ export function clearanceDocument(paper: ClearancePaper): PdfDocumentModel {
   const { content, block } = paper
   const notice = noticeOf(paper)
   const flag = notice === null ? 'C' : 'N'
-  const short = formatFingerprint(block.hash)
   const low = content.batch.reduce((sum, one) => sum + one.count.low, 0)
   const high = content.batch.reduce((sum, one) => sum + one.count.high, 0)
   return {
     title: words.title({ number: content.number }),
-    language: 'en',
-    paper: paper.paper,
+    ...signedFrame(paper, notice, content.zone),
     head: {
       facility: paper.facility,
       name: words.name,
       number: content.number,
       source: words.source({ zone: content.zone }),
       subject: { name: content.name, flag, lines: [words.animals({ low, high })] },
-    },
-    signers: [signerLine(block)],
-    ...(short.ok ? { recordCheck: short.value } : {}),
-    ...(notice === null ? {} : { notice }),
-    printed: {
-      by: paper.printedBy,
-      at: sayInstantWithOffset(paper.printedAt, content.zone),
-      atIso: paper.printedAt,
-      note: documentWords.laterVersion,
     },
     blocks: [
       {

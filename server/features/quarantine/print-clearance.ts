@@ -34,7 +34,7 @@ export function createClearancePrinter(parts: ClearancePrintParts) {
         block,
         recalled: status === 'recalled',
         facility: await parts.facility.valueOf('facility.name'),
-        paper: (await parts.facility.valueOf('facility.paper')) === 'Letter' ? 'letter' : 'a4',
+        paper: await parts.facility.paper(),
         printedBy: actor.printedName,
         printedAt: parts.clock.now().toISOString(),
       }),

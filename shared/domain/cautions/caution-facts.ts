@@ -1,6 +1,7 @@
 import type { LifeStage } from '../animals/description.ts'
 import type { AgentCode } from '../formulary/agent.ts'
 import type { WaterKind } from '../formulary/dose-line.ts'
+import type { OrderRoute } from '../orders/order-route.ts'
 import type { TaxonGroup } from '../taxa/taxon-group.ts'
 import type { FacilityDate, Instant, Zone } from '../time/instant.ts'
 import type { ConcentrationBasis } from '../units/basis.ts'
@@ -8,11 +9,13 @@ import type { UnitOf } from '../units/unit-table.ts'
 import type { Fact } from './fact.ts'
 
 export type ConcentrationUnit = UnitOf<'massConcentration'> | UnitOf<'volumeConcentration'>
+/** What a target or a dose line is in: so much in the water, or so much for the weight of the animal. */
+export type DoseUnit = ConcentrationUnit | UnitOf<'bodyDose'>
 
-/** What is wanted in the water. Without a basis the figure has no meaning (R27). */
+/** What is wanted in the water, or for the weight of the animal. Without a basis the figure has no meaning (R27). */
 export interface DoseTarget {
   value: number
-  unit: ConcentrationUnit
+  unit: DoseUnit
   basis: ConcentrationBasis | null
 }
 
@@ -20,7 +23,7 @@ export interface DoseTarget {
 export interface DefaultRange {
   low: number | null
   high: number
-  unit: ConcentrationUnit
+  unit: DoseUnit
   basis: ConcentrationBasis
   /** Longest contact that its source names; null: left in the water, or to effect. */
   longestContactMinutes: number | null
@@ -41,6 +44,19 @@ export interface AnimalInWater {
   enclosureCode: string
   /** Of eggs: sum of daily mean temperatures since fertilisation, °C·days; null when not told. */
   dailyTemperatureUnits: number | null
+}
+
+/** The newest weight of one animal, or the mean of a group. */
+export interface WeightFact {
+  animalId: string
+  /** Accession number, for the sentence. */
+  label: string
+  grams: number
+  at: Instant
+  /** Measured on a balance, or reckoned. */
+  measured: boolean
+  /** Whether it lies in the plausible band of its taxon; null where the taxon has none. */
+  plausible: boolean | null
 }
 
 /** An order or dose of any agent into this water, this one left out. `from` null: no day set yet; `until` null: no end. */
@@ -92,6 +108,7 @@ export interface CautionFacts {
   at: Instant
   zone: Zone
   agent: AgentCode
+  route: OrderRoute
   order: {
     target: Fact<DoseTarget>
     timing: Fact<'timed' | 'indefinite'>
@@ -142,6 +159,8 @@ export interface CautionFacts {
     handledInLast24h: Fact<boolean>
     /** Taxa in the water for which this agent is new here: not used before, no test group, no declared experience. */
     withoutExperience: Fact<readonly string[]>
+    /** Newest weights of those who are treated; whoever was never weighed is not among them. */
+    weights: Fact<readonly WeightFact[]>
   }
   volume: {
     determination: Fact<VolumeFact>

@@ -1,4 +1,5 @@
 import type { SourceKey, SourceMark } from '../sources.ts'
+import type { OrderRoute } from '../orders/order-route.ts'
 import type { FacilityDate } from '../time/instant.ts'
 import type { UnitCode } from '../units/unit-table.ts'
 import type { CautionCode, CautionParams, ResolveCode } from './caution-code.ts'
@@ -128,6 +129,9 @@ export interface RuleParameter {
   mark: SourceMark
   /** Which way the facility may move it freely; the other way loosens the rule. */
   tighter: 'lower' | 'higher'
+  /** Least and most that a facility may confirm, in the unit, where they are not those of `parameterLimits`. */
+  least?: number
+  most?: number
 }
 
 /** A facility's own value, with whoever confirmed it. */
@@ -167,9 +171,15 @@ export interface CautionRule {
   levels: readonly CautionLevel[]
   when: CautionStage | 'both'
   overridable: boolean
+  /** The routes it is asked for; only immersion where it does not say. */
+  routes?: readonly OrderRoute[]
   parameters: Readonly<Record<string, RuleParameter>>
   /** The facts it looks at; a test holds it to them. */
   uses: readonly FactPath[]
+  /** All that it can find, each with what would resolve it; a test holds it to them. */
+  findings: Readonly<Partial<Record<CautionCode, readonly ResolveCode[]>>>
+  /** What its findings may bring besides a level; nothing where it does not say. */
+  effects?: readonly CautionEffect['kind'][]
   sources: readonly RuleSource[]
   /** Whether the rule has anything to do with this order at all; decides which conditions are printed. */
   concerns(facts: CautionFacts): boolean

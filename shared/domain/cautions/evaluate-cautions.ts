@@ -12,6 +12,7 @@ import {
   type RuleSource,
   cautionLevels,
 } from './caution-rule.ts'
+import type { OrderRoute } from '../orders/order-route.ts'
 import { cautionRules } from './caution-rules.ts'
 import { normaliseFacts } from './normalise-facts.ts'
 import { type ResolvedParameter, resolveParameters } from './resolve-parameters.ts'
@@ -88,7 +89,7 @@ export function evaluateCautions(question: CautionQuestion): CautionAnswer {
   const cautions: Caution[] = []
   const conditions: CautionCondition[] = []
   for (const rule of cautionRules) {
-    if (!rule.concerns(facts)) continue
+    if (!routesOf(rule).includes(facts.route) || !rule.concerns(facts)) continue
     const resolved = resolveParameters(rule, settings)
     const parameters = Object.fromEntries(resolved.map(({ key, value }) => [key, value]))
     if (stage === 'design' && rule.when === 'start') {
@@ -114,6 +115,9 @@ export function evaluateCautions(question: CautionQuestion): CautionAnswer {
   const rank = ({ level }: Caution) => cautionLevels.indexOf(level)
   return { stage, cautions: cautions.sort((a, b) => rank(a) - rank(b)), conditions }
 }
+
+/** The routes that a rule is asked for: immersion, unless it names others. */
+export const routesOf = ({ routes = ['immersion'] }: CautionRule): readonly OrderRoute[] => routes
 
 function conditionOf(
   rule: CautionRule,
@@ -141,6 +145,7 @@ function hasChanged(rule: CautionRule, now: CautionFacts, then: CautionFacts | u
   if (!then) return false
   return (
     now.agent !== then.agent ||
+    now.route !== then.route ||
     rule.uses.some((path) => JSON.stringify(factAt(now, path)) !== JSON.stringify(factAt(then, path)))
   )
 }

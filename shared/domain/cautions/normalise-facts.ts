@@ -1,11 +1,15 @@
 import { type CautionFacts, type FactPath, factAt, factGroups } from './caution-facts.ts'
 import type { Fact } from './fact.ts'
 
+/** Facts as an order may hold that was signed before there were other routes than the water. */
+type SignedFacts = Omit<CautionFacts, 'route'> & Partial<Pick<CautionFacts, 'route'>>
+
 /**
  * The facts, with every one that holds a figure which is no finite number set to unknown. A broken figure must not pass
  * a comparison by being neither above nor below a limit.
  */
-export function normaliseFacts(facts: CautionFacts): CautionFacts {
+export function normaliseFacts(given: SignedFacts): CautionFacts {
+  const facts: CautionFacts = { ...given, route: given.route ?? 'immersion' }
   let sound = facts
   for (const group of factGroups) {
     const broken = Object.keys(facts[group]).filter((name) => {

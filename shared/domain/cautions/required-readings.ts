@@ -1,4 +1,4 @@
-import type { AgentCode } from '../formulary/agent.ts'
+import type { AgentCode, immersionAgents } from '../formulary/agent.ts'
 import type { CautionFacts, FactPath } from './caution-facts.ts'
 import type { Fact } from './fact.ts'
 import { valueOf } from './fact.ts'
@@ -6,7 +6,7 @@ import type { ReadingName } from './reading-name.ts'
 
 /** Beside oxygen, which every bath asks for. */
 const byAgent: Record<
-  AgentCode,
+  (typeof immersionAgents)[number],
   { always: readonly ReadingName[]; fresh?: readonly ReadingName[]; marine?: readonly ReadingName[] }
 > = {
   formalin: { always: ['temperature'] },
@@ -25,13 +25,16 @@ const byAgent: Record<
   fenbendazole: { always: ['temperature'] },
 }
 
+const readingsOf = (agent: AgentCode): (typeof byAgent)[keyof typeof byAgent] =>
+  agent in byAgent ? byAgent[agent as keyof typeof byAgent] : { always: [] }
+
 /**
  * The readings of the water that a bath asks for before a dose: oxygen whatever the agent, and what the agent needs. Water of unknown kind asks for those of both kinds.
  *
  * @source project-default: the rule (R31) names the readings, which agent needs which is ours
  */
 export function requiredReadings(facts: CautionFacts): readonly ReadingName[] {
-  const { always, fresh = [], marine = [] } = byAgent[facts.agent]
+  const { always, fresh = [], marine = [] } = readingsOf(facts.agent)
   const kind = valueOf(facts.water.kind)
   const isFresh = kind === null || kind === 'fresh' || kind === 'brackish'
   const isMarine = kind === null || kind === 'marine' || kind === 'brackish'

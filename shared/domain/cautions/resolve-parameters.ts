@@ -1,4 +1,5 @@
 import type { CautionRule, CautionSettings, ConfirmedParameter, RuleParameter } from './caution-rule.ts'
+import { loosens } from './check-parameter.ts'
 
 /** A parameter as it was used, so that a caution can show by what it was judged. */
 export interface ResolvedParameter extends RuleParameter {
@@ -21,7 +22,6 @@ export function resolveParameters(rule: CautionRule, settings: CautionSettings):
     if (!confirmed || !Number.isFinite(confirmed.value))
       return { ...parameter, key, value: parameter.default, isLoosened: false, confirmed: null }
     const { value, ...by } = confirmed
-    const isLoosened = parameter.tighter === 'lower' ? value > parameter.default : value < parameter.default
-    return { ...parameter, key, value, isLoosened, confirmed: by }
+    return { ...parameter, key, value, isLoosened: loosens(parameter, value), confirmed: by }
   })
 }

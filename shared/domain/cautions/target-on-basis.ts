@@ -1,5 +1,6 @@
 import { convert } from '../units/convert.ts'
-import type { CautionFacts, ConcentrationUnit, DefaultRange } from './caution-facts.ts'
+import { unitOf } from '../units/unit-of.ts'
+import type { CautionFacts, DefaultRange, DoseUnit } from './caution-facts.ts'
 import { copperConcentration } from './copper-concentration.ts'
 import { formalinConcentration } from './formalin-concentration.ts'
 import { valueOf } from './fact.ts'
@@ -34,16 +35,21 @@ export function targetOnBasisOf(
 
 /**
  * How many times a dose line's upper end the bare figure of a target is, whatever each is a concentration of; null where
- * even the units are of another kind. A microlitre counts as a milligram: near enough to see a slip by powers of ten.
+ * even the units are of another kind. A dose for a weight is compared with such doses alone. A microlitre counts as a milligram: near enough to see a slip by powers of ten.
  */
 export function bareShareOf(facts: CautionFacts, range: DefaultRange): number | null {
   const target = valueOf(facts.order.target)
-  const figure = target && bareMgPerL(target.value, target.unit)
-  const high = bareMgPerL(range.high, range.unit)
+  if (!target) return null
+  const isByWeight = unitOf(target.unit).dimension === 'bodyDose'
+  if (isByWeight !== (unitOf(range.unit).dimension === 'bodyDose')) return null
+  const figure = bareFigure(target.value, target.unit)
+  const high = bareFigure(range.high, range.unit)
   return figure === null || high === null || !(high > 0) ? null : figure / high
 }
 
-function bareMgPerL(value: number, unit: ConcentrationUnit): number | null {
+function bareFigure(value: number, unit: DoseUnit): number | null {
+  const byWeight = convert(value, unit, 'mg/kg')
+  if (byWeight.ok) return byWeight.value
   const byMass = convert(value, unit, 'mg/L')
   if (byMass.ok) return byMass.value
   const byVolume = convert(value, unit, 'uL/L')

@@ -13,7 +13,7 @@ import type { Rise } from './rise-needed.ts'
  * Amount for a target of the substance itself: mass wanted, ÷ share of it in the labelled compound, ÷ strength.
  *
  * @param volume the line that gives the litres
- * @refuses as compoundNeeded and productStrength · target-above-strength: no amount of a liquid brings the water to
+ * @refuses as productForMass · target-above-strength: no amount of a liquid brings the water to
  *          more than the liquid's own strength
  * @source  check values bath.06, bath.07, bath.09, bath.10, bath.13 to bath.15, cu.01, cu.02
  */
@@ -23,8 +23,6 @@ export function amountFromMass(
   volume: WorkingLine,
   product: BathProduct,
 ): Result<Amount, DoseRefusal> {
-  const strength = productStrength(product)
-  if (!strength.ok) return strength
   const active: WorkingLine = {
     key: 'active-needed',
     code: 'active-needed',
@@ -34,6 +32,26 @@ export function amountFromMass(
     unit: 'mg',
     rests: [...rise.rests, volume.key],
   }
+  const amount = productForMass(basis, active, product)
+  if (!amount.ok) return amount
+  return amount.value.unit === 'mL' && amount.value.value >= volume.value * 1000
+    ? refuse('target-above-strength', 'target')
+    : amount
+}
+
+/**
+ * Amount of a product that holds a mass of what is wanted: ÷ share of it in the labelled compound, ÷ strength.
+ *
+ * @param active the line that gives the mass of what is wanted, mg
+ * @refuses as compoundNeeded and productStrength
+ */
+export function productForMass(
+  basis: ConcentrationBasis,
+  active: WorkingLine,
+  product: BathProduct,
+): Result<Amount, DoseRefusal> {
+  const strength = productStrength(product)
+  if (!strength.ok) return strength
   const compound = compoundNeeded(basis, active, product)
   if (!compound.ok) return compound
   const { mass, lines } = compound.value
@@ -42,7 +60,6 @@ export function amountFromMass(
   if (strength.value.of === 'volume') {
     const { mgPerMl, line } = strength.value
     const value = mass.value / mgPerMl
-    if (value >= volume.value * 1000) return refuse('target-above-strength', 'target')
     const expression = `${massTerm} / (${valueTerm(mgPerMl, 'mg/mL')}) to mL`
     const last = { key: 'amount', code: 'product-volume-from-active' as const, params: {}, expression, value }
     return ok({

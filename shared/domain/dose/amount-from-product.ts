@@ -40,13 +40,28 @@ export function amountFromProduct(
     const line = { key: 'amount', code: 'product-volume' as const, params: {}, expression, value }
     return ok({ value, unit: 'mL', lines: [{ ...line, unit: 'mL', rests }] })
   }
-  const grams = amount / perThousand
-  const massKey = product.form === 'solid' ? 'amount' : 'product-mass'
+  return productByMass(
+    { grams: amount / perThousand, expression: `${litres} * ${rise.term} to g`, rests },
+    product,
+  )
+}
+
+/**
+ * Amount of a product whose mass is known: a solid as it is, a liquid by its density.
+ *
+ * @param mass.expression the arithmetic that gives the grams
+ * @refuses density-missing and as readDensity
+ */
+export function productByMass(
+  { grams, expression, rests }: { grams: number; expression: string; rests: readonly string[] },
+  product: BathProduct,
+): Result<Amount, DoseRefusal> {
+  const key = product.form === 'solid' ? 'amount' : 'product-mass'
   const mass: WorkingLine = {
-    key: massKey,
+    key,
     code: 'product-mass',
     params: {},
-    expression: `${litres} * ${rise.term} to g`,
+    expression,
     value: grams,
     unit: 'g',
     rests,
@@ -55,7 +70,7 @@ export function amountFromProduct(
   const density = readDensity(product)
   if (!density.ok) return density
   const value = grams / density.value.value
-  const expression = `${valueTerm(grams, 'g')} / (${enteredTerm(density.value)}) to mL`
-  const line = { key: 'amount', code: 'product-volume-from-mass' as const, params: {}, expression, value }
-  return ok({ value, unit: 'mL', lines: [mass, { ...line, unit: 'mL', rests: [massKey] }] })
+  const byDensity = `${valueTerm(grams, 'g')} / (${enteredTerm(density.value)}) to mL`
+  const last = { key: 'amount', code: 'product-volume-from-mass' as const, params: {}, expression: byDensity }
+  return ok({ value, unit: 'mL', lines: [mass, { ...last, value, unit: 'mL', rests: [key] }] })
 }

@@ -9,6 +9,9 @@ export const doseLimits = {
   mostTargetUlPerL: 100_000,
   /** mg or µL of a stock solution: a kilogram or a litre of something in a litre. */
   mostStockPerL: 1_000_000,
+  /** A drug of ten grams for a kilogram, and an animal of twenty tonnes: as of an injection on the bench. */
+  mostDoseMgPerKg: 10_000,
+  mostWeightGrams: 20_000_000,
   leastDensityGPerMl: 0.5,
   mostDensityGPerMl: 3,
   mostStrengthMgPerMl: 2000,

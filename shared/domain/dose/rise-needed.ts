@@ -67,7 +67,7 @@ function asCompound(
 }
 
 /** A target is a dose: 0.10 mg/L is written 0.1 mg/L also in the working. */
-export function targetTerm(target: ReadTarget['concentration']): string {
+export function targetTerm(target: ReadTarget['concentration'] | ParsedQuantity<'bodyDose'>): string {
   const value = target.entered.value.replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '')
   return enteredTerm({ ...target, entered: { ...target.entered, value } })
 }

@@ -1,8 +1,5 @@
-/**
- * Agents given into the water. The code names the drug itself; its established name, as printed, is in
- * shared/messages/formulary.ts.
- */
-export const agentCodes = [
+/** Agents that are given into the water. */
+export const immersionAgents = [
   'formalin',
   'copper-sulfate',
   'chelated-copper',
@@ -18,6 +15,23 @@ export const agentCodes = [
   'oxytetracycline',
   'fenbendazole',
 ] as const
+
+/** Agents that are given to the animal itself: injected, by mouth, in its feed or on its skin. */
+export const systemicAgents = [
+  'enrofloxacin',
+  'florfenicol',
+  'ceftazidime',
+  'itraconazole',
+  'voriconazole',
+  'butorphanol',
+  'ketamine',
+  'meloxicam',
+  'ketoprofen',
+  'dexamethasone',
+] as const
+
+/** Every agent. The code names the drug itself; its established name, as printed, is in shared/messages/formulary.ts. */
+export const agentCodes = [...immersionAgents, ...systemicAgents] as const
 
 export type AgentCode = (typeof agentCodes)[number]
 
@@ -35,11 +49,14 @@ export const hazardAgents: readonly AgentCode[] = [
   'chelated-copper',
 ]
 
-/** Agents that hide nothing that a quarantine protocol tests for: an anaesthetic has no effect on parasite or germ. */
-const notMasking: readonly AgentCode[] = ['tricaine']
+/**
+ * Agents that hide nothing that a quarantine protocol tests for: anaesthetics and pain killers have no effect on
+ * parasite or germ. A corticosteroid is not among them: it may hide signs.
+ */
+const notMasking: readonly AgentCode[] = ['tricaine', 'butorphanol', 'ketamine', 'meloxicam', 'ketoprofen']
 
 /**
- * Whether a bath with an agent hides what quarantine tests look for, so that a window has to pass after its end.
+ * Whether a treatment with an agent hides what quarantine tests look for, so that a window has to pass after its end.
  *
  * @source quarantine reference K14 with the treatments reference's list of masking codes: project default (P)
  */

@@ -1,5 +1,6 @@
 import { decimalOf } from '../quantities/decimal.ts'
 import { roundToDivision } from '../quantities/round-to-division.ts'
+import { roundingErrorPercent } from '../quantities/rounding-error.ts'
 import { ok, refuse, type Result } from '../result.ts'
 import { checkNumbers } from '../units/check-numbers.ts'
 import { finiteOrRefuse } from '../units/finite-or-refuse.ts'
@@ -79,9 +80,6 @@ export function injectionSites(volumeMl: number, mostPerSiteMl: number): Result<
   return Number.isFinite(sites) ? ok(sites) : refuse('not-finite', 'mostPerSiteMl')
 }
 
-/** Below this the difference is of the binary form, not of the rounding. */
-const leastErrorPercent = 1e-9
-
 export interface RoundedInjection {
   /** As the syringe shows it, with the places of its graduation. */
   text: string
@@ -113,10 +111,11 @@ export function roundInjection(
   if (!rounded.ok) return refuse('not-finite', 'volumeMl')
   const millilitres = Number(rounded.value)
   if (millilitres === 0) return refuse('below-half-graduation', 'graduationMl')
-  const errorPercent = 100 * (millilitres / volumeMl - 1)
-  // 0.4 × 12 ÷ 5 is 0.96 but for its last binary digit, which is no error of a syringe
-  const isWhole = Math.abs(errorPercent) < leastErrorPercent
-  return ok({ text: rounded.value, millilitres, errorPercent: isWhole ? 0 : errorPercent })
+  return ok({
+    text: rounded.value,
+    millilitres,
+    errorPercent: roundingErrorPercent(millilitres, volumeMl),
+  })
 }
 
 /** Fewer graduations than this make too large an error. @source injection-practice */

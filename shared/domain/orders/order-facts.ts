@@ -12,7 +12,7 @@ import type { BathOrderDraft, ChosenProduct } from './bath-order-draft.ts'
 import { longestContactInADay } from './longest-contact-in-a-day.ts'
 
 /** The facts of the water and its animals, as the server assembled them; order and lot are still to be put in. */
-export type BathFacts = Omit<CautionFacts, 'order' | 'lot' | 'agent'>
+export type BathFacts = Omit<CautionFacts, 'order' | 'lot' | 'agent' | 'route'>
 
 const orUnknown = <T>(value: T | null, source: string): Fact<T> =>
   value === null ? unknown() : known(value, null, source)
@@ -94,6 +94,7 @@ export function orderFacts(
   return {
     ...base,
     agent: chosen.agent,
+    route: 'immersion',
     order: {
       target: targetFact(draft),
       timing: orUnknown(draft.timing, 'the order'),

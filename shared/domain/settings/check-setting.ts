@@ -61,7 +61,7 @@ export function checkSetting(definition: SettingDefinition, text: string): Resul
     case 'number-form':
       return checkNumberForm(value)
     case 'text':
-      return value === '' ? refuse('empty', 'value') : ok(value)
+      return value === '' && !definition.mayBeEmpty ? refuse('empty', 'value') : ok(value)
     case 'zone':
       return isZone(value) ? ok(value) : refuse('unknown-zone', 'value')
     case 'choice':

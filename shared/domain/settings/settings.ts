@@ -6,6 +6,8 @@ export interface SettingDefinition {
   default: string
   kind: 'text' | 'zone' | 'choice' | 'list' | 'number' | 'number-form' | 'on-call'
   choices?: readonly string[]
+  /** A text that a facility may leave out. */
+  mayBeEmpty?: true
   /** Bounds of a number, in the unit named by the key. */
   min?: number
   max?: number
@@ -21,6 +23,13 @@ export const settings = {
   'facility.name': {
     default: 'This facility',
     kind: 'text',
+    confirm: 'facility.manage',
+    source: 'project-default',
+  },
+  'facility.address': {
+    default: '',
+    kind: 'text',
+    mayBeEmpty: true,
     confirm: 'facility.manage',
     source: 'project-default',
   },

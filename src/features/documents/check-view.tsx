@@ -13,6 +13,7 @@ const kindNames: Record<string, () => string> = {
   'acquisition-history': () => words['acquisition-history'],
   'treatment-order': () => words['treatment-order'],
   'bath-sheet': () => words['bath-sheet'],
+  'order-label': () => words['order-label'],
   clearance: () => words.clearance,
 }
 

@@ -1,7 +1,7 @@
 import { useState } from 'react'
 import { useQueryClient } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
-import { PenLine, Play, Printer } from 'lucide-react'
+import { Copy, PenLine, Play, Printer, Tag } from 'lucide-react'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { useMay } from '../../lib/may.ts'
@@ -17,8 +17,9 @@ import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { TextField } from '../../ui/text-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { fieldsOfOrder } from './copied-order.ts'
 import { useDiscontinue, useLiftHold } from './mutations.ts'
-import { printAddress } from './queries.ts'
+import { labelAddress, printAddress } from './queries.ts'
 
 const over = new Set<Order['phase']>(['completed', 'expired', 'discontinued'])
 
@@ -44,6 +45,19 @@ export function OrderActs({ order, version }: { order: Order; version: number })
           {words.print}
         </Button>
       )}
+      {print.allowed && order.record === 'intact' ? (
+        <a
+          className={buttonClass({})}
+          href={labelAddress(order.number)}
+          download={`${order.number}-label.pdf`}
+        >
+          <ButtonFace icon={Tag}>{words.printLabel}</ButtonFace>
+        </a>
+      ) : (
+        <Button icon={Tag} shut={print.why ?? words.labelNotIntact}>
+          {words.printLabel}
+        </Button>
+      )}
       {amend.allowed && !ended && order.draft === null ? (
         <ButtonLink icon={PenLine} to={paths.editOrder(order.number)}>
           {words.amend}
@@ -53,10 +67,26 @@ export function OrderActs({ order, version }: { order: Order; version: number })
           {words.amend}
         </Button>
       )}
+      <CopyOrder order={order} />
       {order.phase === 'held' ? <LiftHold order={order} /> : null}
       {hold.allowed && order.phase !== 'held' && !ended ? <Hold order={order} /> : null}
       <Discontinue order={order} ended={order.phase === 'discontinued' || order.phase === 'completed'} />
     </section>
+  )
+}
+
+/** A new order that begins as this one; nothing of this one changes. */
+function CopyOrder({ order }: { order: Order }) {
+  const draft = useMay('order.draft')
+  if (fieldsOfOrder(order) === null) return null
+  return draft.allowed ? (
+    <ButtonLink icon={Copy} to={paths.copyOrder(order.number)}>
+      {words.copy}
+    </ButtonLink>
+  ) : (
+    <Button icon={Copy} shut={draft.why ?? ''}>
+      {words.copy}
+    </Button>
   )
 }
 

@@ -24,6 +24,7 @@ import { formularyQuery } from '../formulary/index.ts'
 import { answersToSend, noAnswers, whyNotSign } from './answers-model.ts'
 import type { Answers } from './answers-model.ts'
 import { CarriedIntoOrder } from './carried-order.tsx'
+import { copiedOrder, fieldsOfOrder } from './copied-order.ts'
 import { CourseFields } from './course-fields.tsx'
 import { JudgedCautions } from './judged-cautions.tsx'
 import { OrderFields } from './order-fields.tsx'
@@ -45,7 +46,16 @@ const pauseMs = 400
  * Writing a treatment order: what is ordered at the left, the amount with its working in the middle, conditions,
  * cautions and the signature at the right. The server works it out and judges it after every pause.
  */
-export function OrderForm({ opened, above }: { opened: Order | null; above?: React.ReactNode }) {
+export function OrderForm({
+  opened,
+  copied = null,
+  above,
+}: {
+  opened: Order | null
+  /** An earlier order that a new one begins as. */
+  copied?: Order | null
+  above?: React.ReactNode
+}) {
   const me = useMe()
   const { zone } = me.facility
   const navigate = useNavigate()
@@ -55,7 +65,7 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
   const draft = useMay('order.draft')
   const isProposal = draft.conditions.includes('proposal-only')
   const carried = useCarried('order')
-  const [start] = useState(() => startOf(opened, zone, carried))
+  const [start] = useState(() => startOf({ opened, copied, zone, carried }))
   const [values, setValues] = useState<OrderValues>(start)
   const [answers, setAnswers] = useState<Answers>(
     () => (location.state as { answers?: Answers } | null)?.answers ?? noAnswers,
@@ -145,6 +155,7 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
         <div className="pane stack gap-4">
           {above}
           {carried ? <CarriedIntoOrder carried={carried} /> : null}
+          {copied && !opened ? <p className="hint">{words.copied({ number: copied.number })}</p> : null}
           {isProposal ? <p className="hint">{words.proposalNote}</p> : null}
           {stale && fields ? (
             <StaleChoice
@@ -241,10 +252,21 @@ export function OrderForm({ opened, above }: { opened: Order | null; above?: Rea
   )
 }
 
-/** The form of a draft, of a signed order to be amended, with what came from the bench, or empty. */
-function startOf(opened: Order | null, zone: string, carried: CarryTo<'order'> | null): OrderValues {
-  const signed = opened?.versions[0]?.content as { fields?: Order['draft'] } | undefined
-  const fields = opened?.draft ?? signed?.fields ?? null
+/** The form of a draft, of a signed order to be amended, of a copy, with what came from the bench, or empty. */
+function startOf({
+  opened,
+  copied,
+  zone,
+  carried,
+}: {
+  opened: Order | null
+  copied: Order | null
+  zone: string
+  carried: CarryTo<'order'> | null
+}): OrderValues {
+  const fields = opened && fieldsOfOrder(opened)
   if (fields) return valuesOf(fields, zone)
+  const earlier = copied && fieldsOfOrder(copied)
+  if (earlier) return copiedOrder(earlier, zone)
   return carried ? carriedOrder(carried) : emptyOrder()
 }

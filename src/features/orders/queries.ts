@@ -7,6 +7,7 @@ import {
   listOrdersCsv,
   previewOrder,
   printOrder,
+  printOrderLabel,
 } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import { addressOf, api } from '../../lib/api-client.ts'
@@ -58,6 +59,8 @@ export function ordersCsvAddress(asked: OrdersAsked): string {
   const { cursor: _cursor, limit: _limit, ...shown } = asked
   return addressOf(listOrdersCsv, {}, shown)
 }
+
+export const labelAddress = (number: string): string => addressOf(printOrderLabel, { number })
 
 export const printAddress = (number: string, version: number): string =>
   addressOf(printOrder, { number }, { version })

@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import type { CautionFacts } from '../../../shared/domain/cautions/caution-facts.ts'
 import { type Fact, known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import { agentCodes } from '../../../shared/domain/formulary/agent.ts'
+import { orderRoutes } from '../../../shared/domain/orders/order-route.ts'
 import { taxonGroupNames } from '../../../shared/domain/taxa/taxon-group.ts'
 import { at, minutesAgo } from './some-facts.ts'
 
@@ -22,7 +23,13 @@ const figure = fc.oneof(
   fc.integer({ min: 0, max: 3_000_000 }).map((thousandths) => thousandths / 1000),
   fc.constantFrom(-1, Number.NaN, Infinity, 100_000),
 )
-const unit = fc.constantFrom('mg/L' as const, 'uL/L' as const, 'g/L' as const, 'percent_v_v' as const)
+const unit = fc.constantFrom(
+  'mg/L' as const,
+  'uL/L' as const,
+  'g/L' as const,
+  'percent_v_v' as const,
+  'mg/kg' as const,
+)
 const basis = fc.constantFrom('active', 'product', 'salt', 'base', 'free', 'total') as fc.Arbitrary<
   'active' | 'product' | 'salt' | 'base' | 'free' | 'total'
 >
@@ -38,6 +45,14 @@ const animal = fc.record({
   lifeStage: fc.constantFrom('egg' as const, 'fry' as const, 'adult' as const, 'unknown' as const),
   enclosureCode: fc.constant('QT-1'),
   dailyTemperatureUnits: fc.option(figure),
+})
+const weight = fc.record({
+  animalId: fc.uuid(),
+  label: fc.constant('HP-0001'),
+  grams: figure,
+  at: instant,
+  measured: fc.boolean(),
+  plausible: fc.option(fc.boolean()),
 })
 const use = fc.record({
   agent: fc.constantFrom(...agentCodes),
@@ -62,6 +77,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
   zone: fc.constantFrom('Europe/Lisbon', 'America/Halifax'),
   agent: fc.constantFrom(...agentCodes),
+  route: fc.constantFrom(...orderRoutes),
   order: fc.record({
     target: anyFact(fc.record({ value: figure, unit, basis: fc.option(basis) })),
     timing: anyFact(fc.constantFrom('timed' as const, 'indefinite' as const)),
@@ -109,6 +125,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     unwellPercent: anyFact(figure),
     handledInLast24h: anyFact(fc.boolean()),
     withoutExperience: anyFact(fc.array(fc.constant('Genus species'), { maxLength: 2 })),
+    weights: anyFact(fc.array(weight, { maxLength: 3 })),
   }),
   volume: fc.record({
     determination: anyFact(

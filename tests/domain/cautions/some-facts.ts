@@ -49,6 +49,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
     at,
     zone: 'Europe/Lisbon',
     agent,
+    route: 'immersion',
     order: {
       target: known(target),
       timing: known('timed'),
@@ -102,6 +103,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       unwellPercent: known(0),
       handledInLast24h: known(false),
       withoutExperience: known([]),
+      weights: notApplicable(),
     },
     volume: {
       determination: known({

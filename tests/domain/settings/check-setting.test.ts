@@ -12,6 +12,11 @@ describe('a setting', () => {
     expect(check(key, settings[key].default)).toBe(settings[key].default)
   })
 
+  it('may be left out where it is an address, and not where it is the name on every document', () => {
+    expect(check('facility.address', '  ')).toBe('')
+    expect(check('facility.name', '  ')).toEqual(['empty'])
+  })
+
   it.each([
     ['HP-{0000}', 'HP-{0000}'],
     [' 2026/{000} ', '2026/{000}'],

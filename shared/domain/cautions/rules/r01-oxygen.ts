@@ -18,6 +18,11 @@ export const oxygen = defineRule({
     oxygenMaxAgeMinutes: { default: 30, unit: 'min', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.oxygenMgPerL'],
+  findings: {
+    'oxygen-unknown': ['read-oxygen'],
+    'oxygen-old': ['read-oxygen'],
+    'oxygen-low': ['raise-oxygen'],
+  },
   sources: [
     { source: 'cfr-529-1030', mark: 'V' },
     { source: 'project-default', mark: 'P' },

@@ -25,6 +25,10 @@ export const formalinOxygenDemand = defineRule({
     'lifeSupport.aeration',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'oxygen-would-fall': ['lower-target', 'raise-oxygen', 'aerate-and-log'],
+    'oxygen-fall-unknown': ['read-oxygen', 'aerate-and-log'],
+  },
   sources: [
     { source: 'ufifas-vm77', mark: 'V' },
     { source: 'formalin-density', mark: 'M' },

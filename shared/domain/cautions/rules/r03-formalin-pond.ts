@@ -22,6 +22,14 @@ export const formalinPond = defineRule({
     'water.hasBloom',
     'animals.inWater',
   ],
+  findings: {
+    'pond-warm': ['wait-for-cooler-water'],
+    'pond-temperature-unknown': ['read-temperature'],
+    'pond-bloom': ['choose-other-agent'],
+    'pond-bloom-unknown': ['look-for-bloom'],
+    'pond-striped-bass': ['move-animals', 'choose-other-agent'],
+    'inhabitants-unknown': ['record-inhabitants'],
+  },
   sources: [{ source: 'cfr-529-1030', mark: 'V' }],
   concerns: ({ agent, order }) => agent === 'formalin' && valueOf(order.setting) === 'pond',
   judge(facts, { warmestC, windowHours }) {

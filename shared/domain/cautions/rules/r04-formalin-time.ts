@@ -28,6 +28,13 @@ export const formalinTime = defineRule({
     'animals.inWater',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'formalin-too-long': ['shorten-contact'],
+    'formalin-too-long-for-strength': ['shorten-contact', 'lower-target'],
+    'formalin-indefinite': ['shorten-contact', 'lower-target'],
+    'formalin-indefinite-not-allowed': ['shorten-contact'],
+    'formalin-time-unknown': ['state-contact-time'],
+  },
   sources: [{ source: 'cfr-529-1030', mark: 'V' }],
   concerns: ({ agent, order }) => agent === 'formalin' && valueOf(order.setting) !== 'pond',
   judge(facts, parameters) {

@@ -51,6 +51,12 @@ export const formalinCeiling = defineRule({
     'animals.inWater',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'formalin-over-ceiling': ['lower-target'],
+    'formalin-over-salmonid-ceiling': ['lower-target'],
+    'formalin-salmonid-temperature-unknown': ['read-temperature', 'lower-target'],
+    'inhabitants-unknown': ['record-inhabitants'],
+  },
   sources: [
     { source: 'cfr-529-1030', mark: 'V' },
     { source: 'project-default', mark: 'P' },

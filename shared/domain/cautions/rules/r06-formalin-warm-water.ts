@@ -24,6 +24,10 @@ export const formalinWarmWater = defineRule({
     'animals.inWater',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'formalin-in-warm-water': ['lower-target', 'cool-water'],
+    'formalin-temperature-unknown': ['read-temperature', 'lower-target'],
+  },
   sources: [{ source: 'ufifas-vm77', mark: 'V' }],
   concerns: ({ agent }) => agent === 'formalin',
   judge(facts, { boundaryC, capProductMgPerL, windowHours }) {

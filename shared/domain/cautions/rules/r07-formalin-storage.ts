@@ -9,6 +9,10 @@ export const formalinStorage = defineRule({
   overridable: true,
   parameters: {},
   uses: ['lot.storageFault'],
+  findings: {
+    'formalin-storage-fault': ['use-other-lot'],
+    'formalin-storage-unknown': ['look-at-the-bottle'],
+  },
   sources: [{ source: 'cfr-529-1030', mark: 'V' }],
   concerns: ({ agent }) => agent === 'formalin',
   judge({ lot }) {

@@ -12,6 +12,11 @@ export const formalinPermanganate = defineRule({
     apartHours: { default: 72, unit: 'h', source: 'project-default', mark: 'P', tighter: 'higher' },
   },
   uses: ['history.agentUses', 'order.startsAt', 'order.endsAt'],
+  findings: {
+    'formalin-and-permanganate': ['wait-between-agents', 'choose-other-agent'],
+    'formalin-and-permanganate-together': ['wait-between-agents', 'choose-other-agent'],
+    'agent-history-unknown': ['record-history'],
+  },
   sources: [
     { source: 'ufifas-fa37', mark: 'V2' },
     { source: 'project-default', mark: 'P' },

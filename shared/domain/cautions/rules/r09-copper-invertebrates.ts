@@ -10,6 +10,11 @@ export const copperInvertebrates = defineRule({
   overridable: true,
   parameters: {},
   uses: ['animals.inWater'],
+  findings: {
+    'inhabitants-unknown': ['record-inhabitants'],
+    'copper-invertebrates': ['move-animals', 'part-the-water', 'choose-other-agent'],
+    'copper-elasmobranchs': ['move-animals', 'part-the-water', 'choose-other-agent'],
+  },
   sources: [{ source: 'ufifas-fa165', mark: 'V2' }],
   concerns: ({ agent }) => agent === 'copper-sulfate' || agent === 'chelated-copper',
   judge({ animals }) {

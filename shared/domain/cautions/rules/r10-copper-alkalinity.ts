@@ -21,6 +21,11 @@ export const copperAlkalinity = defineRule({
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.kind', 'water.alkalinityMgPerLCaCO3'],
+  findings: {
+    'alkalinity-unknown': ['read-alkalinity'],
+    'alkalinity-old': ['read-alkalinity'],
+    'alkalinity-low': ['raise-alkalinity', 'choose-other-agent'],
+  },
   sources: [
     { source: 'ufifas-fa008', mark: 'V' },
     { source: 'project-default', mark: 'P' },

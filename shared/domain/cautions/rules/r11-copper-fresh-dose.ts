@@ -17,6 +17,10 @@ export const copperFreshDose = defineRule({
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.target', 'water.kind', 'water.alkalinityMgPerLCaCO3'],
+  findings: {
+    'copper-over-alkalinity': ['lower-target'],
+    'copper-over-cap': ['lower-target'],
+  },
   sources: [{ source: 'ufifas-fa008', mark: 'V' }],
   concerns: ({ agent, water }) => agent === 'copper-sulfate' && valueOf(water.kind) !== 'marine',
   judge(facts, { capMgPerL, alkalinityDivisor, maxAgeHours }) {

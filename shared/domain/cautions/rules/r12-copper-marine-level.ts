@@ -21,6 +21,13 @@ export const copperMarineLevel = defineRule({
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.target', 'order.copperCourse', 'water.kind', 'water.freeCopperMgPerL'],
+  findings: {
+    'copper-target-high': ['lower-target', 'choose-one-copper'],
+    'copper-high': ['hold-copper'],
+    'copper-very-high': ['hold-copper'],
+    'copper-low': ['add-copper'],
+    'copper-reading-missing': ['read-copper'],
+  },
   sources: [
     { source: 'ufifas-fa165', mark: 'V2' },
     { source: 'project-default', mark: 'P' },

@@ -10,6 +10,12 @@ export const copperForms = defineRule({
   overridable: true,
   parameters: {},
   uses: ['history.agentUses', 'history.reducerInUse', 'order.target', 'water.kind'],
+  findings: {
+    'agent-history-unknown': ['record-history'],
+    'copper-forms-mixed': ['choose-one-copper'],
+    'copper-reducer': ['take-reducer-out'],
+    'copper-reducer-unknown': ['record-history'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: ({ agent }) => agent === 'copper-sulfate' || agent === 'chelated-copper',
   judge(facts) {

@@ -8,6 +8,10 @@ export const carbon = defineRule({
   overridable: true,
   parameters: {},
   uses: ['lifeSupport.carbon'],
+  findings: {
+    'carbon-on': ['carbon-off'],
+    'carbon-unknown': ['carbon-off'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: ({ lifeSupport }) => lifeSupport.carbon.state !== 'not-applicable',
   judge({ lifeSupport }) {

@@ -27,6 +27,12 @@ export const ozoneAndUv = defineRule({
   overridable: true,
   parameters: {},
   uses: ['lifeSupport.ozone', 'lifeSupport.uv'],
+  findings: {
+    'ozone-on': ['ozone-off'],
+    'ozone-unknown': ['ozone-off'],
+    'uv-on': ['uv-off'],
+    'uv-unknown': ['uv-off'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: ({ agent, lifeSupport }) =>
     (harmedByOzone.includes(agent) && lifeSupport.ozone.state !== 'not-applicable') ||

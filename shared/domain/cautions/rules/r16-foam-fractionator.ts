@@ -8,6 +8,10 @@ export const foamFractionator = defineRule({
   overridable: true,
   parameters: {},
   uses: ['lifeSupport.foamFractionator'],
+  findings: {
+    'fractionator-on': ['fractionator-off'],
+    'fractionator-unknown': ['fractionator-off'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: ({ lifeSupport }) => lifeSupport.foamFractionator.state !== 'not-applicable',
   judge({ agent, lifeSupport }) {

@@ -10,6 +10,14 @@ export const chloroquine = defineRule({
   overridable: true,
   parameters: {},
   uses: ['animals.inWater', 'water.hasPlantsOrAlgae', 'lifeSupport.lights'],
+  findings: {
+    'inhabitants-unknown': ['record-inhabitants'],
+    'chloroquine-invertebrates': ['move-animals', 'part-the-water', 'choose-other-agent'],
+    'chloroquine-algae': ['choose-other-water'],
+    'chloroquine-algae-unknown': ['record-inhabitants'],
+    'chloroquine-lights': ['dim-lights'],
+    'chloroquine-lights-unknown': ['dim-lights'],
+  },
   sources: [{ source: 'noga-2010', mark: 'V2' }],
   concerns: ({ agent }) => agent === 'chloroquine',
   judge({ animals, water, lifeSupport }) {

@@ -19,6 +19,15 @@ export const peroxideSpecies = defineRule({
     windowHours: { default: 4, unit: 'h', source: 'project-default', mark: 'P', tighter: 'higher' },
   },
   uses: ['animals.inWater', 'water.temperatureC', 'water.recentTemperaturesC'],
+  findings: {
+    'inhabitants-unknown': ['record-inhabitants'],
+    'peroxide-excluded': ['choose-other-agent', 'move-animals'],
+    'peroxide-walleye': ['test-some-first'],
+    'peroxide-eggs': ['test-some-first'],
+    'peroxide-eggs-age-unknown': ['record-inhabitants', 'test-some-first'],
+    'peroxide-warm': ['cool-water', 'lower-target'],
+    'peroxide-temperature-unknown': ['read-temperature'],
+  },
   sources: [
     { source: 'cfr-529-1150', mark: 'V' },
     { source: 'treatment-practice', mark: 'M' },

@@ -21,6 +21,11 @@ export const chloramineWater = defineRule({
     maxAgeHours: { default: 24, unit: 'h', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['water.pH', 'water.alkalinityMgPerLCaCO3'],
+  findings: {
+    'chloramine-acid': ['correct-water', 'lower-target'],
+    'chloramine-soft': ['correct-water', 'lower-target'],
+    'chloramine-unknown': ['read-water'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: ({ agent }) => agent === 'chloramine-t',
   judge(facts, { lowestPh, floorMgPerLCaCO3, maxAgeHours }) {

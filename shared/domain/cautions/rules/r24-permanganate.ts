@@ -34,6 +34,15 @@ export const permanganate = defineRule({
     'history.givenInLast24hMgPerL',
     'history.agentUses',
   ],
+  findings: {
+    'agent-history-unknown': ['record-history'],
+    'permanganate-alkaline': ['choose-other-agent', 'correct-water'],
+    'permanganate-hard': ['choose-other-agent', 'correct-water'],
+    'permanganate-unknown': ['read-water'],
+    'permanganate-total': ['lower-target', 'wait-between-agents'],
+    'permanganate-total-unknown': ['record-history'],
+    'permanganate-repeated': ['wait-between-agents'],
+  },
   sources: [
     { source: 'ufifas-fa37', mark: 'V2' },
     { source: 'treatment-practice', mark: 'M' },

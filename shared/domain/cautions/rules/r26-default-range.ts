@@ -1,4 +1,5 @@
 import { doseOf } from '../caution-param.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds, isBelow } from '../exceeds.ts'
 import { contactParameters, linesOfAgent, linesToCompare, nearestLine } from '../dose-lines.ts'
@@ -14,6 +15,7 @@ export const defaultRange = defineRule({
   levels: ['warning', 'stop'],
   when: 'design',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     stopFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
     lowFactor: { default: 0.5, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'higher' },
@@ -29,6 +31,15 @@ export const defaultRange = defineRule({
     'water.kind',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'over-default': ['check-figure', 'lower-target'],
+    'far-over-default': ['check-figure', 'lower-target'],
+    'under-default': ['check-figure', 'raise-target'],
+    'no-default-range': ['choose-dose-line', 'check-figure'],
+    'default-not-comparable': ['state-basis', 'check-figure'],
+    'no-line-fits': ['choose-dose-line', 'check-figure', 'confirm-dose-line'],
+    'line-not-named': ['choose-dose-line'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { stopFactor, lowFactor, ...contactLimits }) {

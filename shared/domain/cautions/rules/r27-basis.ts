@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -7,8 +8,12 @@ export const basis = defineRule({
   levels: ['stop'],
   when: 'design',
   overridable: false,
+  routes: orderRoutes,
   parameters: {},
   uses: ['order.target'],
+  findings: {
+    'basis-missing': ['state-basis'],
+  },
   sources: [{ source: 'dose-arithmetic', mark: 'C' }],
   concerns: () => true,
   judge({ order }) {

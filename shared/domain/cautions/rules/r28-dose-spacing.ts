@@ -1,5 +1,6 @@
 import { addHours, hoursBetween } from '../../time/instant-arithmetic.ts'
 import { doseWindow } from '../../schedule/dose-window.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -15,6 +16,7 @@ export const doseSpacing = defineRule({
   levels: ['warning', 'stop'],
   when: 'both',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     veryEarlyFactor: {
       default: 0.5,
@@ -25,6 +27,13 @@ export const doseSpacing = defineRule({
     },
   },
   uses: ['order.spacing', 'order.startsAt', 'order.contactMinutes'],
+  findings: {
+    'dose-early': ['wait-for-window'],
+    'dose-very-early': ['wait-for-window', 'amend-order'],
+    'interval-within-contact': ['amend-order', 'check-figure'],
+    'dose-late': ['amend-order'],
+    'doses-past-plan': ['amend-order'],
+  },
   sources: [
     { source: 'hyatt-2017', mark: 'V' },
     { source: 'project-default', mark: 'P' },

@@ -23,6 +23,14 @@ export const otherAgents = defineRule({
     sameDayHours: { default: 24, unit: 'h', source: 'treatment-practice', mark: 'M', tighter: 'higher' },
   },
   uses: ['history.agentUses', 'order.startsAt', 'order.endsAt'],
+  findings: {
+    'agent-history-unknown': ['record-history'],
+    'same-agent-together': ['amend-order', 'wait-between-agents'],
+    'same-agent-same-day': ['amend-order', 'wait-between-agents'],
+    'agents-not-together': ['wait-between-agents', 'choose-other-agent'],
+    'agent-in-water': ['wait-between-agents', 'choose-other-agent'],
+    'agent-same-day': ['wait-between-agents', 'choose-other-agent'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: () => true,
   judge(facts, { sameDayHours }, stage) {

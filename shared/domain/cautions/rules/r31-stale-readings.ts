@@ -34,6 +34,10 @@ export const staleReadings = defineRule({
     'water.freeCopperMgPerL',
     'water.totalCopperMgPerL',
   ],
+  findings: {
+    'test-missing': ['read-water'],
+    'test-old': ['read-water'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, parameters) {

@@ -37,6 +37,16 @@ export const volume = defineRule({
     differsFactor: { default: 2, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['volume.determination'],
+  findings: {
+    'volume-unknown': ['determine-volume'],
+    'volume-other-valves': ['determine-volume'],
+    'volume-gross': ['determine-volume'],
+    'volume-old': ['determine-volume'],
+    'volume-estimated': ['determine-volume'],
+    'volume-estimated-error-unknown': ['determine-volume'],
+    'volume-error-large': ['determine-volume'],
+    'volume-differs': ['determine-volume'],
+  },
   sources: [
     { source: 'extension-sheets', mark: 'V' },
     { source: 'project-default', mark: 'P' },

@@ -1,4 +1,5 @@
 import { facilityDateOf } from '../../time/facility-date.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 
 /** No dose from a lot that has expired, was recalled or quarantined, or from a stock past its beyond-use date. */
@@ -7,8 +8,18 @@ export const lot = defineRule({
   levels: ['stop'],
   when: 'start',
   overridable: true,
+  routes: orderRoutes,
   parameters: {},
   uses: ['lot.expiresOn', 'lot.beyondUseOn', 'lot.status'],
+  findings: {
+    'lot-expired': ['use-other-lot'],
+    'lot-expiry-unknown': ['record-lot'],
+    'lot-recalled': ['use-other-lot'],
+    'lot-quarantined': ['use-other-lot'],
+    'lot-status-unknown': ['record-lot'],
+    'lot-beyond-use': ['use-other-lot'],
+    'lot-beyond-use-unknown': ['record-lot'],
+  },
   sources: [{ source: 'treatment-practice', mark: 'M' }],
   concerns: () => true,
   judge(facts) {

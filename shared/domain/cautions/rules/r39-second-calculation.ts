@@ -1,6 +1,7 @@
 import { hazardAgents } from '../../formulary/agent.ts'
 import type { SecondCalculationCause } from '../caution-code.ts'
 import type { CautionFacts } from '../caution-facts.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
@@ -22,6 +23,7 @@ export const secondCalculation = defineRule({
   levels: ['note'],
   when: 'start',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     volumeLitres: { default: 10_000, unit: 'L', source: 'project-default', mark: 'P', tighter: 'lower' },
     amountGrams: { default: 1000, unit: 'g', source: 'project-default', mark: 'P', tighter: 'lower' },
@@ -37,6 +39,10 @@ export const secondCalculation = defineRule({
     'order.dosesGiven',
     'order.changedSinceLastCalculation',
   ],
+  findings: {
+    'second-calculation': ['calculate-again-by-another'],
+  },
+  effects: ['secondCalculation'],
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: (facts) => valueOf(facts.order.isTopUpInsideLimits) !== true,
   judge(facts, limits) {
@@ -64,7 +70,9 @@ function findCause(facts: CautionFacts, limits: Limits): SecondCalculationCause 
   const millilitres = valueOf(facts.order.amountMillilitres)
   if (grams !== null && exceeds(grams, limits.amountGrams)) return 'amount'
   if (millilitres !== null && exceeds(millilitres, limits.amountMillilitres)) return 'amount'
-  return litres === null || (grams === null && millilitres === null) ? 'not-known' : null
+  const { state } = facts.volume.determination
+  const isVolumeMissing = litres === null && (facts.route === 'immersion' || state === 'unknown')
+  return isVolumeMissing || (grams === null && millilitres === null) ? 'not-known' : null
 }
 
 /** What is not known counts as a reason to calculate again. */

@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 
@@ -7,10 +8,17 @@ export const weakAnimals = defineRule({
   levels: ['warning'],
   when: 'start',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     unwellPercent: { default: 5, unit: 'percent', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['animals.unwellPercent', 'animals.handledInLast24h'],
+  findings: {
+    'animals-unwell': ['let-animals-rest'],
+    'animals-unwell-unknown': ['look-at-animals'],
+    'animals-handled': ['let-animals-rest'],
+    'animals-handled-unknown': ['look-at-animals'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge({ animals }, { unwellPercent }) {

@@ -1,3 +1,4 @@
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { valueOf } from '../fact.ts'
 
@@ -7,8 +8,13 @@ export const firstUse = defineRule({
   levels: ['warning'],
   when: 'design',
   overridable: true,
+  routes: orderRoutes,
   parameters: {},
   uses: ['animals.withoutExperience'],
+  findings: {
+    'first-use': ['test-some-first', 'declare-experience'],
+    'first-use-unknown': ['test-some-first', 'declare-experience'],
+  },
   sources: [
     { source: 'cfr-529-1030', mark: 'V' },
     { source: 'project-default', mark: 'P' },

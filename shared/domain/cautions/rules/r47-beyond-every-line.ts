@@ -1,4 +1,5 @@
 import { doseOf } from '../caution-param.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { defineRule } from '../caution-rule.ts'
 import { isForWater, linesOfAgent } from '../dose-lines.ts'
 import { exceeds } from '../exceeds.ts'
@@ -17,10 +18,14 @@ export const beyondEveryLine = defineRule({
   levels: ['stop'],
   when: 'both',
   overridable: false,
+  routes: orderRoutes,
   parameters: {
     beyondFactor: { default: 10, unit: 'factor', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.target', 'order.agentRanges', 'water.kind', 'lot.densityGPerMl'],
+  findings: {
+    'beyond-every-line': ['check-figure', 'lower-target', 'confirm-dose-line'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { beyondFactor }) {

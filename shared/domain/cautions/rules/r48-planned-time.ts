@@ -1,5 +1,6 @@
 import { addHours, compareInstants, hoursBetween } from '../../time/instant-arithmetic.ts'
 import { doseWindow } from '../../schedule/dose-window.ts'
+import { orderRoutes } from '../../orders/order-route.ts'
 import { type CautionFinding, defineRule } from '../caution-rule.ts'
 import { exceeds } from '../exceeds.ts'
 import { valueOf } from '../fact.ts'
@@ -15,11 +16,19 @@ export const plannedTime = defineRule({
   levels: ['note', 'warning'],
   when: 'design',
   overridable: true,
+  routes: orderRoutes,
   parameters: {
     aheadDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
     planDays: { default: 90, unit: 'd', source: 'project-default', mark: 'P', tighter: 'lower' },
   },
   uses: ['order.startsAt', 'order.spacing'],
+  findings: {
+    'start-past': ['check-start'],
+    'start-far': ['check-start'],
+    'plan-long': ['check-plan'],
+    'doses-carried': ['check-start'],
+    'plan-counts-given': ['check-start'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, { aheadDays, planDays }) {

@@ -21,6 +21,18 @@ export const lineConditions = defineRule({
     'order.contactMinutesPerDay',
     'water.kind',
   ],
+  findings: {
+    'line-water-unknown': ['state-water-kind', 'choose-dose-line'],
+    'line-of-other-water': ['choose-dose-line', 'choose-other-agent'],
+    'left-in-bath-line': ['shorten-contact', 'choose-dose-line'],
+    'left-in-over-line': ['shorten-contact', 'choose-dose-line'],
+    'contact-over-line': ['shorten-contact', 'choose-dose-line'],
+    'contact-far-over-line': ['shorten-contact', 'choose-dose-line'],
+    'day-over-line': ['shorten-contact', 'choose-dose-line'],
+    'day-far-over-line': ['shorten-contact', 'choose-dose-line'],
+    'contact-over-untimed-line': ['shorten-contact', 'choose-dose-line', 'confirm-dose-line'],
+    'contact-far-over-untimed-line': ['shorten-contact', 'choose-dose-line', 'confirm-dose-line'],
+  },
   sources: [{ source: 'project-default', mark: 'P' }],
   concerns: () => true,
   judge(facts, limits) {

@@ -31,6 +31,10 @@ export const dosesAddUp = defineRule({
     'water.kind',
     'lot.densityGPerMl',
   ],
+  findings: {
+    'doses-add-up': ['take-agent-out', 'lower-target', 'amend-order'],
+    'dose-on-dose': ['take-agent-out', 'amend-order'],
+  },
   sources: [
     { source: 'treatment-practice', mark: 'M' },
     { source: 'project-default', mark: 'P' },
