@@ -36,6 +36,7 @@ const licenceFields = {
 export const Licence = z.object({
   id: RecordId,
   ...licenceFields,
+  lastDay: LocalDate.describe('Last day on which it is valid, earlier than printed where it was ended'),
   state: z.enum(licenceStateNames).describe('State today at this facility'),
   warning: LicenceWarning.nullable().describe('That it ends soon or has ended with none in its place'),
   ended: z
@@ -64,6 +65,14 @@ export const PersonRow = z.object({
   active: z.boolean().describe('May sign in'),
   mustChangePassword: z.boolean().describe('Still has a one-time password'),
   licenceState: z.enum(['valid', 'not-valid', 'none']).describe('Whether a licence is valid today here'),
+  licenceNotice: LicenceWarning.extend({
+    class: LicenceClassName,
+    number: LicenceNumber,
+    jurisdiction: Jurisdiction,
+    lastDay: LocalDate.describe('Last day on which it is valid'),
+  })
+    .nullable()
+    .describe('The licence or registration whose end presses most; null where none ends soon'),
   lastSignInAt: Instant.nullable().describe('Last sign-in'),
   signingLockedUntil: Instant.nullable().describe(
     'Until when signing is locked after wrong passwords in a row; null when it is not',

@@ -1,6 +1,7 @@
 import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
+import { scheduleOf } from '../../../shared/domain/licences/controlled-agents.ts'
 import { orderProblemWords, orderWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
@@ -13,6 +14,7 @@ import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { checkAnswers } from './check-answers.ts'
+import { scheduleOfDraft } from './draft-schedule.ts'
 import { contentOf } from './order-content.ts'
 import type { Override } from './order-content.ts'
 import type { OrderEventRow, OrderHead } from './order.entity.ts'
@@ -185,12 +187,13 @@ export function createOrdersService(parts: OrdersParts) {
       number: string,
       request: SignRequest,
     ): Promise<{ versionNo: number }> {
+      const controlledSchedule = await scheduleOfDraft(parts, number)
       const signatory = await parts.signing.confirmSignatory(
         context,
         'order.sign',
         request.password,
         parts.clock.now(),
-        { licenceId: request.licenceId },
+        { licenceId: request.licenceId, controlledSchedule },
       )
       return parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
@@ -209,6 +212,8 @@ export function createOrdersService(parts: OrdersParts) {
         if (found.changed.length > 0) throw new Problem('not-as-entered', { detail: found.changed.join(' ') })
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
+        // the drug was exchanged between the look at the registration and now
+        if (product && scheduleOf(product.agent) !== controlledSchedule) throw new Problem('stale-version')
         const volume = situation.water.volume
         if (product && fields.lotId !== null && !product.lots.some(({ id }) => id === fields.lotId))
           throw refusedInput('/fields/lotId', orderWords.lotOfOther, 'lot-of-other-product')

@@ -1,5 +1,6 @@
 import type { AttachedDocument } from '../../../shared/contracts/documents.contract.ts'
 import type { Licence, Person, PersonRow } from '../../../shared/contracts/people.contract.ts'
+import { lastDayOf } from '../../../shared/domain/licences/licence-classes.ts'
 import type { HeldLicence } from '../../../shared/domain/licences/licence-classes.ts'
 import { licenceNotices } from '../../../shared/domain/licences/licence-notices.ts'
 import { licenceState } from '../../../shared/domain/licences/licence-state.ts'
@@ -55,6 +56,7 @@ export function presentLicences(
       validFrom: row.valid_from,
       validUntil: row.valid_until,
       state: licenceState(heldLicence(row), today.on, today.accepted),
+      lastDay: lastDayOf(heldLicence(row)),
       warning: notice ? { level: notice.level, daysLeft: notice.daysLeft } : null,
       ended:
         row.ended_on === null
@@ -80,6 +82,7 @@ export function presentPersonRow(row: PersonReadRow, today: Today): PersonRow {
     .filter((licence) => licence.class === 'veterinary')
     .map((licence) => licenceState(heldLicence(licence), today.on, today.accepted))
   const lockedUntil = row.signing_locked_until
+  const [notice] = licenceNoticesOf(row.licences, today)
   return {
     id: row.id,
     email: row.email,
@@ -92,6 +95,16 @@ export function presentPersonRow(row: PersonReadRow, today: Today): PersonRow {
       : states.some((state) => state !== 'void' && state !== 'superseded')
         ? 'not-valid'
         : 'none',
+    licenceNotice: notice
+      ? {
+          class: notice.licence.class,
+          number: notice.licence.number,
+          jurisdiction: notice.licence.jurisdiction,
+          level: notice.level,
+          daysLeft: notice.daysLeft,
+          lastDay: notice.lastDay,
+        }
+      : null,
     lastSignInAt: row.last_sign_in_at?.toISOString() ?? null,
     signingLockedUntil: lockedUntil !== null && lockedUntil > today.now ? lockedUntil.toISOString() : null,
     version: row.version,

@@ -1,4 +1,3 @@
-import { lastDayOf } from '../../../shared/domain/licences/licence-classes.ts'
 import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import type { SignedIn } from '../../platform/http/guard.ts'
 import type { FacilityService } from '../facility/index.ts'
@@ -32,7 +31,7 @@ export function createMeReader(parts: {
         number: licence.number,
         validFrom: licence.validFrom,
         validUntil: licence.validUntil,
-        lastDay: lastDayOf({ validUntil: licence.validUntil, endedOn: licence.ended?.on ?? null }),
+        lastDay: licence.lastDay,
         state: licence.state,
         warning: licence.warning,
         validToday: licence.state === 'valid',
