@@ -5,17 +5,21 @@ import { counted, defineMessages } from './define-messages.ts'
 import { sayDate } from './say-date.ts'
 
 const stillMay = 'You may still read, write drafts, and hold and stop.'
+const opensItself = 'It opens by itself then; nobody can open it sooner.'
 
 /** Words of signing that all kinds of signature share: which licence signs, what lacks, what is locked. */
 export const signingWords = defineMessages({
   passwordWrong: 'That is not your password.',
   lockedFor: (p: { minutes: number }) =>
-    `Too many wrong passwords in a row: signing is locked for you for another ${String(p.minutes)} min. ${stillMay}`,
+    `Too many wrong passwords in a row: signing is locked for you for another ${String(p.minutes)} min. ${opensItself} ${stillMay}`,
   lockedNow: (p: { minutes: number }) =>
-    `It was the last of too many wrong ones in a row: signing is locked for you for ${String(p.minutes)} min. ${stillMay}`,
+    `It was the last of too many wrong ones in a row: signing is locked for you for ${String(p.minutes)} min. ${opensItself} ${stillMay}`,
   locked: (p: { until: string }) =>
-    `Too many wrong passwords in a row: signing is locked for you until ${p.until}. ${stillMay}`,
+    `Too many wrong passwords in a row: signing is locked for you until ${p.until}. ${opensItself} ${stillMay}`,
   shutLocked: 'Signing is locked for you for now.',
+  shutLacks: 'It says above what is needed to sign this.',
+  scheduleOf: (p: { schedule: string }) =>
+    `Controlled drug, schedule ${p.schedule}. The schedule is from memory and nobody has checked it: confirm it before you rely on it.`,
   chooseLicence: 'Licence you sign under',
   chooseHint: 'The one you choose is printed with the signature.',
   chooseFirst: 'Choose the licence you sign under.',
