@@ -227,6 +227,7 @@ export async function seedOrders(
     await orders.service.signOrder(as('vet'), number, {
       password: demoPassword,
       expectedVersion: 1,
+      relationship: true,
       read: named('warning'),
       overrides: [],
     })

@@ -237,6 +237,12 @@ export const signOrder = contract({
     licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('The signer’s password'),
     expectedVersion: Version,
+    relationship: z
+      .boolean()
+      .optional()
+      .describe(
+        'The signer states a valid veterinarian-client-patient relationship; an extralabel order is not signed without',
+      ),
     read: z.array(AnsweredCaution).max(60).describe('Warnings that the signer has read'),
     overrides: z
       .array(AnsweredCaution.extend({ reason: Reason }))

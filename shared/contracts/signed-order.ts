@@ -50,6 +50,11 @@ export const SignedBathOrder = z.object({
   overrides: z
     .array(z.object({ ...signedAnswer, reason: z.string() }))
     .describe('Stops that were overridden, with their reasons'),
+  relationship: z
+    .string()
+    .nullable()
+    .optional()
+    .describe('What the signer stated of knowing these animals, where the use is extralabel'),
   read: z.array(z.union([z.string(), z.object(signedAnswer)])).describe('Warnings that were read'),
 })
 export type SignedBathOrder = z.infer<typeof SignedBathOrder>

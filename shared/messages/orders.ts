@@ -47,6 +47,18 @@ export const figureChanged = defineMessages({
 })
 
 /** Why an order is refused, and what to do. */
+/**
+ * What a signer states under an extralabel order, in our words.
+ *
+ * @source 21 CFR 530.3(i)(1) to (3), as the treatments reference restates it (V)
+ */
+export const relationshipWords = defineMessages({
+  statement:
+    'I have taken on the medical judgement for these animals, and the facility follows my instructions. I know them well enough for at least a preliminary diagnosis, by a recent examination or by visits to where they are kept. I can be reached for follow-up.',
+  heading: 'Veterinarian-client-patient relationship',
+  needed: 'An extralabel order is signed only with this statement. Read it, and tick it if it is true.',
+})
+
 export const orderProblemWords = defineMessages({
   noLabel:
     'This order is not what was signed, so there is no label for it. Tell a veterinarian and the administrator.',

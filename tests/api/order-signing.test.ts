@@ -198,7 +198,7 @@ describe('what may be signed: an order', () => {
       agent
         .post(`/api/orders/${draft.number}/signature`)
         .set('Idempotency-Key', newKey())
-        .send({ password, expectedVersion: draft.version, read, overrides: [], ...more })
+        .send({ password, relationship: true, expectedVersion: draft.version, read, overrides: [], ...more })
     // a reason kept for later: the lot is judged at the dose, and no veterinarian has seen it recalled
     const ahead = {
       ruleId: 'R34',

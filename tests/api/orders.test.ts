@@ -263,7 +263,7 @@ describe('an order for a bath', () => {
     const { agent } = await api.as('veterinarian')
     const key = newKey()
     const answers = await answersTo(api, draft.number)
-    const body = { password, expectedVersion: draft.version, ...answers }
+    const body = { password, expectedVersion: draft.version, relationship: true, ...answers }
     const send = () =>
       agent.post(`/api/orders/${draft.number}/signature`).set('Idempotency-Key', key).send(body)
     const replies = await Promise.all([send(), send()])

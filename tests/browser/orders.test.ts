@@ -239,6 +239,10 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     await picture(page, `order-form-${String(size.width)}`)
     await signing.getByLabel('Your password').fill('wrong password')
     await signing.getByRole('button', { name: 'Sign order' }).click()
+    // extralabel: asked for before anything is sent
+    await signing.getByText('An extralabel order is signed only with this statement.').first().waitFor()
+    await signing.getByRole('checkbox', { name: /medical judgement/ }).check()
+    await signing.getByRole('button', { name: 'Sign order' }).click()
     await signing
       .getByText(/password/i)
       .last()

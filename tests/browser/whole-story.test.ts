@@ -197,6 +197,7 @@ async function ordersABath(number: string): Promise<string> {
   await signing.getByText(/Read .* more warnings?, and tick/).waitFor()
   await picture(page, 'story-6-warned')
   for (const read of await page.getByRole('checkbox', { name: /I have read this/ }).all()) await read.check()
+  await signing.getByRole('checkbox', { name: /medical judgement/ }).check()
   await signing.getByLabel('Your password').fill(password)
   await signing.getByRole('button', { name: 'Sign order' }).click()
   await page.getByText('Checked now: this is the text that was signed.').waitFor()

@@ -166,6 +166,7 @@ export async function signDraft(
     .send({
       password,
       expectedVersion: draft.version,
+      relationship: true,
       ...answers,
       ...(more.read ? { read: more.read } : {}),
     })

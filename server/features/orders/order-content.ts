@@ -55,6 +55,8 @@ export interface SignedOrder {
   conditions: ReturnType<typeof saidCondition>[]
   overrides: (SignedAnswer & { reason: string })[]
   read: (string | SignedAnswer)[]
+  /** As it was read by the signer; absent in orders signed before it was asked for, null where the use is by the label. */
+  relationship?: string | null
   /** The facility's thresholds that the cautions were judged by; orders signed earlier were judged by the defaults. */
   settings?: CautionSettings
   facts: Json
@@ -70,6 +72,7 @@ export interface ContentRequest {
   volume: NonNullable<WaterFacts['volume']>
   overrides: Override[]
   read: AnsweredCaution[]
+  relationship: string | null
 }
 
 /** Puts the content of a signature together. */
@@ -120,6 +123,7 @@ export function contentOf(request: ContentRequest): SignedOrder {
     conditions: judgement?.answer.conditions.map((condition) => saidCondition(condition, base.zone)) ?? [],
     overrides: request.overrides,
     read: request.read,
+    relationship: request.relationship,
     settings: found.settings,
     facts: JSON.parse(JSON.stringify(judgement?.facts ?? null)) as Json,
   }

@@ -14,7 +14,7 @@ import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { basisNames } from '../../../shared/messages/formulary.ts'
 import { doseWords } from '../../../shared/messages/doses.ts'
-import { doseKindNames, orderPaper, orderWords } from '../../../shared/messages/orders.ts'
+import { doseKindNames, orderPaper, orderWords, relationshipWords } from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault, sayFaultNotice } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstant, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
@@ -261,6 +261,15 @@ const aloneBlocks = ({ recorded }: OrderPaper): DocumentBlock[] =>
         ],
   )
 
+/** What the signer stated of knowing these animals; nothing in an order by the label. */
+const relationshipBlocks = ({ content }: OrderPaper): DocumentBlock[] =>
+  content.relationship
+    ? [
+        { kind: 'heading', text: relationshipWords.heading },
+        { kind: 'paragraph', text: content.relationship },
+      ]
+    : []
+
 /** What an order says on paper, from its text. */
 function statements(paper: OrderPaper): DocumentBlock[] {
   const { content } = paper
@@ -295,6 +304,7 @@ function statements(paper: OrderPaper): DocumentBlock[] {
     givenBlock(paper),
     ...noteBlocks(paper),
     ...aloneBlocks(paper),
+    ...relationshipBlocks(paper),
   ]
 }
 

@@ -117,7 +117,7 @@ function cautions({ content }: LabelPaper): DocumentBlock[] {
 /**
  * The label for a container of what is dispensed under an order, from the signed text alone.
  *
- * @source cfr-530-12: the veterinarian's name and address, established names, directions by class or number of the
+ * @source 21 CFR 530.12(a) to (e), as the treatments reference restates it (V): the veterinarian's name and address, established names, directions by class or number of the
  *         animals, dosage, frequency, route and duration, cautionary statements, withdrawal time
  */
 export function orderLabelDocument(paper: LabelPaper): PdfDocumentModel {

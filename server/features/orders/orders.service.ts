@@ -2,7 +2,7 @@ import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import { scheduleOf } from '../../../shared/domain/licences/controlled-agents.ts'
-import { orderProblemWords, orderWords } from '../../../shared/messages/orders.ts'
+import { orderProblemWords, orderWords, relationshipWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
@@ -49,6 +49,7 @@ export interface SignRequest {
   expectedVersion: number
   read: AnsweredCaution[]
   overrides: Override[]
+  relationship?: boolean | undefined
 }
 
 const subject = (order: Pick<OrderHead, 'id' | 'number'>) => ({
@@ -214,6 +215,9 @@ export function createOrdersService(parts: OrdersParts) {
         const { judgement, product, situation } = found
         // the drug was exchanged between the look at the registration and now
         if (product && scheduleOf(product.agent) !== controlledSchedule) throw new Problem('stale-version')
+        const isExtralabel = fields.use === 'extralabel'
+        if (isExtralabel && request.relationship !== true)
+          throw refusedInput('/relationship', relationshipWords.needed, 'relationship-not-stated')
         const volume = situation.water.volume
         if (product && fields.lotId !== null && !product.lots.some(({ id }) => id === fields.lotId))
           throw refusedInput('/fields/lotId', orderWords.lotOfOther, 'lot-of-other-product')
@@ -240,6 +244,7 @@ export function createOrdersService(parts: OrdersParts) {
           volume,
           overrides: request.overrides,
           read: request.read,
+          relationship: isExtralabel ? relationshipWords.statement : null,
         })
         const sealed = await parts.signing.seal(tx, {
           signatory,

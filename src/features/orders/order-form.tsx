@@ -5,6 +5,7 @@ import { Save } from 'lucide-react'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderListWords, orderViewWords } from '../../../shared/messages/orders-screens.ts'
+import { relationshipWords } from '../../../shared/messages/orders.ts'
 import { carryState, useCarried } from '../../lib/bench-carry.ts'
 import type { CarryTo } from '../../lib/bench-carry.ts'
 import { useMay } from '../../lib/may.ts'
@@ -41,6 +42,11 @@ import { StatedFields } from './stated-fields.tsx'
 import { useOrderWriting } from './use-order-writing.ts'
 
 const pauseMs = 400
+const relationship = {
+  heading: relationshipWords.heading,
+  text: relationshipWords.statement,
+  needed: relationshipWords.needed,
+}
 
 /**
  * Writing a treatment order: what is ordered at the left, the amount with its working in the middle, conditions,
@@ -115,10 +121,14 @@ export function OrderForm({
       })
     }
   }
-  const signNow = async (password: string) => {
+  const signNow = async (password: string, stated: boolean) => {
     setTried(true)
     if (!fields || !judged) return false
-    const order = await writing.signNow(fields, { password, ...answersToSend(judged.cautions, answers) })
+    const order = await writing.signNow(fields, {
+      password,
+      ...(stated ? { relationship: true } : {}),
+      ...answersToSend(judged.cautions, answers),
+    })
     if (!order) return false
     letGo()
     say({ words: words.signed({ number: order.number }) })
@@ -242,6 +252,7 @@ export function OrderForm({
             busy={writing.busy === 'sign'}
             passwordWrong={passwordWrong}
             refused={writing.refusedAt === 'sign' && passwordWrong === undefined ? problem?.says : undefined}
+            statement={fields?.use === 'extralabel' ? relationship : null}
             onSign={signNow}
           />
         </div>

@@ -250,7 +250,7 @@ export function SignedOrder({
           </div>
         ) : null}
         <div className="pane stack gap-5">
-          <OrderSignature signature={signature} />
+          <OrderSignature signature={signature} stated={content?.relationship ?? null} />
           <OrderActs order={order} version={version.versionNo} />
           <OrderVersions order={order} shown={version.versionNo} zone={zone} />
           <OrderHistory order={order} zone={zone} />

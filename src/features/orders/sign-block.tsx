@@ -7,6 +7,7 @@ import { useMe } from '../../lib/me.ts'
 import { Button } from '../../ui/button.tsx'
 import { PasswordField } from '../../ui/password-field.tsx'
 import { SignatureBlock } from '../../ui/signature-block.tsx'
+import { Tick } from '../../ui/tick.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 
 /**
@@ -19,6 +20,7 @@ export function SignBlock({
   busy,
   passwordWrong,
   refused,
+  statement = null,
   onSign,
 }: {
   /** Why the order can't be signed as it stands. */
@@ -28,19 +30,26 @@ export function SignBlock({
   passwordWrong: string | undefined
   /** Why the last attempt was refused, where it was not the password. */
   refused: string | undefined
-  onSign: (password: string) => Promise<boolean>
+  /** What has to be stated besides, and is signed with the order; null where nothing has. */
+  statement?: { heading: string; text: string; needed: string } | null
+  onSign: (password: string, stated: boolean) => Promise<boolean>
 }) {
   const me = useMe()
   const may = useMay('order.sign')
   const [password, setPassword] = useState('')
   const [asked, setAsked] = useState(false)
+  const [tried, setTried] = useState(false)
+  // ticked for this text: another statement has to be read anew
+  const [statedFor, setStatedFor] = useState<string | null>(null)
+  const stated = statement !== null && statedFor === statement.text
   const valid = me.licences.find((licence) => licence.validToday)
   const ended = [...me.licences].sort((a, b) => b.validUntil.localeCompare(a.validUntil))[0]
   const send = async () => {
     setAsked(true)
-    if (password === '') return
+    setTried(true)
+    if (password === '' || (statement !== null && !stated)) return
     // a password is typed for one attempt
-    if (await onSign(password)) setPassword('')
+    if (await onSign(password, stated)) setPassword('')
     setAsked(false)
   }
   return (
@@ -78,6 +87,19 @@ export function SignBlock({
                 </ul>
               </div>
             ) : null}
+            {statement ? (
+              <Tick
+                id="relationship"
+                label={
+                  <>
+                    <b className="block">{statement.heading}</b>
+                    {statement.text}
+                  </>
+                }
+                checked={stated}
+                onChange={(event) => setStatedFor(event.target.checked ? statement.text : null)}
+              />
+            ) : null}
             <PasswordField
               label={words.password}
               autoComplete="off"
@@ -85,7 +107,14 @@ export function SignBlock({
               wrong={passwordWrong ?? (asked && password === '' ? words.passwordNeeded : undefined)}
               onChange={(event) => setPassword(event.target.value)}
             />
-            <WrongSummary fields={[]} general={refused} />
+            <WrongSummary
+              fields={
+                statement && tried && !stated
+                  ? [{ id: 'relationship', label: statement.heading, says: statement.needed }]
+                  : []
+              }
+              general={refused}
+            />
             <Button kind="primary" icon={PenLine} type="submit" shut={busy ? words.signing : shut}>
               {words.signAct}
             </Button>

@@ -3,6 +3,7 @@ import { formatFingerprint } from '../../../shared/domain/documents/format-finge
 import type { SignatureBlock as Block } from '../../../shared/contracts/signing.contract.ts'
 import { documentWords } from '../../../shared/messages/documents.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
+import { relationshipWords } from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault } from '../../../shared/messages/record-fault.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { Icon } from '../../ui/icon.tsx'
@@ -30,7 +31,14 @@ export function BrokenRecord({
 }
 
 /** Who signed, with which licence, when, as what; and whether the text is still what was signed. */
-export function OrderSignature({ signature }: { signature: Block }) {
+export function OrderSignature({
+  signature,
+  stated = null,
+}: {
+  signature: Block
+  /** What the signer stated besides, as it was signed. */
+  stated?: string | null
+}) {
   const { licence, state } = signature
   const fingerprint = formatFingerprint(signature.hash)
   return (
@@ -51,6 +59,11 @@ export function OrderSignature({ signature }: { signature: Block }) {
         </>
       }
     >
+      {stated ? (
+        <p className="signature-text">
+          <b>{relationshipWords.heading}.</b> {stated}
+        </p>
+      ) : null}
       <p className="signature-text">
         {words.signedAt({ at: sayInstantWithOffset(signature.signedAt, signature.zone) })}
       </p>
