@@ -1,3 +1,4 @@
+export { LicenceFacts } from './licence-facts.tsx'
 export { LicenceNoticeLine } from './licence-notice-line.tsx'
 export { OwnLicences } from './own-licences.tsx'
 export { SignerLines } from './signer-lines.tsx'

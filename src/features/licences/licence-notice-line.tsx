@@ -12,7 +12,11 @@ export function LicenceNoticeLine({
   const { warning } = licence
   if (warning === null) return null
   return (
-    <p className={warning.level === 'ended' ? 'row items-start text-magenta t-strong' : 'row items-start t-strong'}>
+    <p
+      className={
+        warning.level === 'ended' ? 'row items-start text-magenta t-strong' : 'row items-start t-strong'
+      }
+    >
       <Icon of={CalendarClock} />
       <span>{sayLicenceNotice({ ...licence, daysLeft: warning.daysLeft })}</span>
     </p>

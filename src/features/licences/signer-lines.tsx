@@ -1,6 +1,7 @@
 import { LockKeyhole } from 'lucide-react'
 import { sayLacks, signingWords as words } from '../../../shared/messages/signing.ts'
 import { sayDate, sayInstant } from '../../../shared/messages/say-date.ts'
+import type { May } from '../../lib/may.ts'
 import { Icon } from '../../ui/icon.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { LicenceNoticeLine } from './licence-notice-line.tsx'
@@ -17,8 +18,16 @@ const printed = ({ jurisdiction, number, of }: ShownLicence) => ({
  * Who signs, with the licence that will stand under it: the only one, or the one to be chosen of several; a registration
  * where one is asked for; what lacks, and a lock, in words.
  */
-export function SignerLines({ signer }: { signer: Signer }) {
+export function SignerLines({ signer, may }: { signer: Signer; may: May }) {
   const { me, choices, licence, registration, lacks, lockedUntil, schedule } = signer
+  // to whoever signs nothing in any of their roles, licences are no matter
+  if (!may.allowed && !me.roles.includes('veterinarian'))
+    return (
+      <>
+        <b>{me.printedName}</b>
+        <p className="text-ink">{may.why}</p>
+      </>
+    )
   return (
     <div className="stack gap-2">
       <b>{me.printedName}</b>
