@@ -108,6 +108,7 @@ export const everySheet = [
   { name: 'person-new', as: 'admin', address: '/settings/people/new' },
   { name: 'person', as: 'admin', address: '/settings/people/:id', list: '/api/people' },
   { name: 'facility', as: 'admin', address: '/settings/facility' },
+  { name: 'rules', as: 'vet', address: '/settings/rules' },
   { name: 'audit', as: 'admin', address: '/settings/audit' },
   { name: 'not-found', as: 'keeper', address: '/nowhere' },
 ]

@@ -19,6 +19,12 @@ export const Stated = z
     hasBloom: z.boolean().nullable().describe('There is a heavy bloom of algae'),
     hasPlantsOrAlgae: z.boolean().nullable().describe('Plants or algae are on show in this water'),
     lights: z.enum(['full', 'dimmed', 'off']).nullable().describe('Lights over the water'),
+    isBuffered: z.boolean().nullable().optional().describe('Bicarbonate goes into the bath with tricaine'),
+    hasBiofilter: z
+      .boolean()
+      .nullable()
+      .optional()
+      .describe('A biofilter stands in this water, where its life support does not say'),
     experienceWith: noneTwice(z.array(z.string().max(200)).max(50)).describe(
       'Taxa for which the veterinarian declares earlier experience with this drug here',
     ),

@@ -190,7 +190,7 @@ export const previewOrder = contract({
   }),
   body: BathOrderFields,
   reply: { 200: OrderPreview },
-  problems: ['not-found', 'dose-line-not-usable'],
+  problems: ['not-found', 'dose-line-not-usable', 'product-not-for-water'],
   idempotent: 'nothing-kept',
 })
 
@@ -202,7 +202,7 @@ export const draftOrder = contract({
   summary: 'Keep a new draft; a technician’s is a proposal',
   body: z.strictObject({ id: RecordId, fields: BathOrderFields }),
   reply: { 201: Order },
-  problems: ['not-found', 'id-already-used', 'dose-line-not-usable'],
+  problems: ['not-found', 'id-already-used', 'dose-line-not-usable', 'product-not-for-water'],
   idempotent: 'by-record-id',
 })
 
@@ -215,7 +215,14 @@ export const reviseDraft = contract({
   params: orderParams,
   body: z.strictObject({ expectedVersion: Version, fields: BathOrderFields }),
   reply: { 200: Order },
-  problems: ['not-found', 'may-not', 'stale-version', 'order-ended', 'dose-line-not-usable'],
+  problems: [
+    'not-found',
+    'may-not',
+    'stale-version',
+    'order-ended',
+    'dose-line-not-usable',
+    'product-not-for-water',
+  ],
 })
 
 /** A caution as it was read: an answer counts for this one alone, in these words. */
@@ -262,6 +269,7 @@ export const signOrder = contract({
     'not-as-entered',
     'bad-input',
     'dose-line-not-usable',
+    'product-not-for-water',
     'caution-stops',
     'caution-not-fired',
     'cautions-unread',

@@ -80,6 +80,7 @@ export const problemStatus = {
   'not-computable': 422,
   'order-incomplete': 422,
   'dose-line-not-usable': 422,
+  'product-not-for-water': 422,
   'caution-stops': 409,
   'caution-not-fired': 409,
   'cautions-unread': 409,

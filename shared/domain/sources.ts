@@ -229,6 +229,11 @@ export const sources = {
     citation: 'Common practice, no source: ten times the chlorine for incoming tap water',
     mark: 'M',
   },
+  'tricaine-ph-study': {
+    citation:
+      'North American Journal of Aquaculture 75:356–360 (2013): pH of tricaine in fresh and artificial sea water',
+    mark: 'V',
+  },
   'tricaine-buffer-practice': {
     citation:
       'Common practice, no source: two parts of bicarbonate to one of tricaine; less in hard or salt water, by the measured pH',

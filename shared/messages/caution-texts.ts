@@ -1,9 +1,7 @@
-import type { CautionCode, CautionParams } from '../domain/cautions/caution-code.ts'
+import type { CautionCode } from '../domain/cautions/caution-code.ts'
+import type { CautionTexts } from './caution-texts-more.ts'
+import { moreCautionTexts, moreCautionTitles } from './caution-texts-more.ts'
 import { counted, defineMessages } from './define-messages.ts'
-
-/** Parameters as a sentence gets them: figures, names and dates written out, bare counts still numbers. */
-type Said<P> = { [K in keyof P]: P[K] extends number ? number : string }
-type Texts = { [Code in CautionCode]: (params: Said<CautionParams[Code]>) => string }
 
 const minutes = (count: number) => duration(count)
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
@@ -155,6 +153,7 @@ export const cautionTitles = defineMessages({
   'animals-handled-unknown': 'Handling of the last day is not known',
   'first-use': 'First use in a taxon here',
   'first-use-unknown': 'Earlier use here is not known',
+  ...moreCautionTitles,
 } satisfies Record<CautionCode, string>)
 
 /** What was found, in a sentence or two. */
@@ -373,4 +372,5 @@ export const cautionTexts = defineMessages({
     'Nobody recorded whether the animals were handled within the last 24 hours.',
   'first-use': (p) => `This drug was not used here before in: ${p.taxa}.`,
   'first-use-unknown': () => 'Whether this drug was used here before in these taxa is not known.',
-} satisfies Texts)
+  ...moreCautionTexts,
+} satisfies CautionTexts)

@@ -24,6 +24,7 @@ export const frameWords = defineMessages({
   help: 'Keys and help',
   people: 'People and licences',
   facility: 'Facility settings',
+  rules: 'Rules of the cautions',
   audit: 'Audit trail',
   watch: 'Light',
   day: 'Day',

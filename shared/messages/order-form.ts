@@ -74,6 +74,8 @@ export const orderFormWords = defineMessages({
   oxygenIsLogged: 'Oxygen is logged continuously',
   hasBloom: 'Heavy bloom of algae',
   hasPlantsOrAlgae: 'Plants or algae on show',
+  isBuffered: 'Buffered with bicarbonate',
+  hasBiofilter: 'Biofilter on this water',
   lights: 'Lights over the water',
   full: 'Full',
   dimmed: 'Dimmed',

@@ -1,3 +1,4 @@
+import { capital } from './capital.ts'
 import { counted, defineMessages } from './define-messages.ts'
 
 /** Words of treatment orders, on screen and on paper. */
@@ -74,6 +75,8 @@ export const orderProblemWords = defineMessages({
     'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
   lineOfOther: (p: { line: string; product: string }) =>
     `This dose line is one of ${p.line}, and the product is ${p.product}. Choose a dose line of the product.`,
+  notForWater: (p: { product: string }) =>
+    `${capital(p.product)} is given to the animal itself: no dose line in force says how much of it goes into water. Choose a product that is given into water.`,
   cautionsChanged:
     'Nothing was signed. An answer belongs to no caution that stands now. Read the cautions as they are now, answer those, and sign again.',
 })

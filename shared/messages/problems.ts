@@ -41,6 +41,7 @@ export const problemTitles = defineMessages({
   'not-computable': 'No figure can be worked out from this',
   'order-incomplete': 'The order is not complete',
   'dose-line-not-usable': 'This dose line cannot be ordered from',
+  'product-not-for-water': 'This product is not given into water',
   'caution-stops': 'A caution stops this',
   'caution-not-fired': 'The cautions have changed since they were read',
   'cautions-unread': 'There are warnings to read first',

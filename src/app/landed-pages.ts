@@ -7,5 +7,6 @@ export const landedPages: ReadonlySet<string> = new Set<string>([
   paths.ownSettings(),
   paths.people(),
   paths.facility(),
+  paths.rules(),
   paths.audit(),
 ])

@@ -53,6 +53,7 @@ const sheetRoutes: RouteObject[] = [
   { path: 'settings/people/new', lazy: () => import('./routes/new-person.tsx') },
   { path: 'settings/people/:id', lazy: () => import('./routes/person.tsx') },
   { path: 'settings/facility', lazy: () => import('./routes/facility-settings.tsx') },
+  { path: 'settings/rules', lazy: () => import('./routes/rules.tsx') },
   { path: 'settings/audit', lazy: () => import('./routes/audit.tsx') },
   { path: 'register', lazy: () => import('./routes/register/transactions.tsx') },
   { path: 'register/acquisitions/new', lazy: () => import('./routes/register/new-acquisition.tsx') },

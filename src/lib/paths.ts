@@ -73,5 +73,6 @@ export const paths = {
   people: () => '/settings/people',
   newPerson: () => '/settings/people/new',
   person: (id: string) => `/settings/people/${part(id)}`,
+  rules: () => '/settings/rules',
   audit: () => '/settings/audit',
 } as const

@@ -1,4 +1,9 @@
-import type { AnimalInWater, CautionFacts, OnOff } from '../../../shared/domain/cautions/caution-facts.ts'
+import type {
+  AnimalInWater,
+  CautionFacts,
+  OnOff,
+  TimedReading,
+} from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
@@ -13,6 +18,7 @@ import type { WaterFacts, WaterQuestions } from '../water/index.ts'
 import { readAgentHistory } from './agent-history.ts'
 import { readExperiencedTaxa } from './agent-history.reads.ts'
 import { readCondition } from './condition.ts'
+import { readHomePh } from './home-ph.ts'
 import type { ConditionParts } from './condition.ts'
 
 /** Salinities that part the kinds of water. Project default: no outside authority. */
@@ -102,6 +108,10 @@ export function createBathFactsReader(parts: BathFactsParts) {
         db,
       )
       const exceptInto = isVessel(water) ? water.enclosureId : null
+      const homePh =
+        agent === 'tricaine'
+          ? await readHomePh(parts, { water, animals: withThoseToCome, named: options.named ?? [] }, at, db)
+          : notApplicable<readonly TimedReading[]>()
       const condition = await readCondition(parts, { animals: withThoseToCome, exceptInto }, at, db)
       const zone = await parts.zone()
       const newTaxa =
@@ -110,7 +120,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
       const base: BathFacts = {
         at: at.toISOString(),
         zone,
-        water: waterFacts(water, temperatures),
+        water: { ...waterFacts(water, temperatures), homePh },
         animals: {
           inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
           unwellPercent: lookFact(condition.unwellPercent),
@@ -126,6 +136,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
           ozone: machineFact(water, 'ozone'),
           uv: machineFact(water, 'uv'),
           foamFractionator: machineFact(water, 'foam-fractionator'),
+          biofilter: biofilterFact(water),
           aeration: machineFact(water, 'aeration'),
           lights: unknown(),
         },
@@ -190,7 +201,7 @@ function waterKind(water: WaterFacts): CautionFacts['water']['kind'] {
 function waterFacts(
   water: WaterFacts,
   temperatures: readonly { canonicalValue: number; at: string }[],
-): CautionFacts['water'] {
+): Omit<CautionFacts['water'], 'homePh'> {
   return {
     kind: waterKind(water),
     temperatureC: readingFact(water, 'temperature', 'degC'),
@@ -222,6 +233,12 @@ function machineFact(water: WaterFacts, kind: LifeSupportKind): Fact<OnOff> {
   const unrecorded = machines.find((machine) => machine.on === null)
   if (unrecorded) return unknown()
   return known('off', machines[0]?.since ?? null, 'the life-support log')
+}
+
+/** Where no biofilter is on the list of machines, another filter may do its work: that is asked, not taken as none. */
+function biofilterFact(water: WaterFacts): Fact<OnOff> {
+  const fact = machineFact(water, 'biofilter')
+  return fact.state === 'not-applicable' ? unknown() : fact
 }
 
 /** Only a confirmed determination that holds for the valves as they stand is a volume to dose by. */

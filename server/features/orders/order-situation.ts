@@ -5,6 +5,7 @@ import type { BathProduct } from '../../../shared/domain/dose/bath-product.ts'
 import type { BathOrderDraft, ChosenProduct } from '../../../shared/domain/orders/bath-order-draft.ts'
 import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
+import { isGivenInWater } from '../../../shared/domain/formulary/agent.ts'
 import { staysInWater } from '../../../shared/domain/formulary/dose-line.ts'
 import type { ConcentrationUnit, DefaultRange } from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionSettings, CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
@@ -96,6 +97,18 @@ const rangeOf = ({ low, high, unit, basis, longestContactMinutes, water, use }: 
   stays: staysInWater(use),
 })
 
+/** Refuses a bath of a drug that is given to the animal itself. */
+async function refuseProduct(parts: SituationParts, { productId }: BathOrderFields): Promise<void> {
+  if (productId === null) return
+  const { agent } = await parts.product(productId)
+  if (isGivenInWater(agent, await parts.doseLinesOf(agent))) return
+  const detail = orderProblemWords.notForWater({ product: agentNames[agent] })
+  throw new Problem('product-not-for-water', {
+    detail,
+    errors: [{ pointer: '/fields/productId', detail, code: 'product-not-for-water' }],
+  })
+}
+
 /**
  * Refuses an order that names a dose line of another drug, or one that is not in force. A signed order keeps the line it
  * was signed with, whatever becomes of it.
@@ -150,6 +163,7 @@ function refusePlan({ doses, intervalHours }: BathOrderFields): void {
 export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields, now: Date): Promise<void> {
   refuseStart(fields, now)
   refusePlan(fields)
+  await refuseProduct(parts, fields)
   await refuseDoseLine(parts, fields)
 }
 

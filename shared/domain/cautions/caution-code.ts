@@ -90,6 +90,12 @@ export interface CautionParams {
   'chloroquine-algae-unknown': Record<never, never>
   'chloroquine-lights': Record<never, never>
   'chloroquine-lights-unknown': Record<never, never>
+  'tricaine-unbuffered': Record<never, never>
+  'tricaine-buffer-unknown': Record<never, never>
+  'tricaine-acid': { reading: CautionQuantity; limit: CautionQuantity }
+  'tricaine-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
+  'tricaine-ph-differs': { reading: CautionQuantity; home: CautionQuantity; limit: CautionQuantity }
+  'tricaine-home-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
   'peroxide-excluded': { animals: readonly NamedAnimal[] }
   'peroxide-walleye': { animals: readonly NamedAnimal[] }
   'peroxide-eggs': { animals: readonly NamedAnimal[]; from: number; to: number }
@@ -105,6 +111,8 @@ export interface CautionParams {
   'permanganate-total': { total: CautionQuantity; limit: CautionQuantity }
   'permanganate-total-unknown': { limit: CautionQuantity }
   'permanganate-repeated': { orderNumber: string; limitDays: number }
+  'biofilter-on': Record<never, never>
+  'biofilter-unknown': Record<never, never>
   'over-default': { target: CautionQuantity; high: CautionQuantity; factor: number }
   'far-over-default': { target: CautionQuantity; high: CautionQuantity; factor: number }
   'under-default': { target: CautionQuantity; low: CautionQuantity }
@@ -217,9 +225,13 @@ export type ResolveCode =
   | 'ozone-off'
   | 'uv-off'
   | 'fractionator-off'
+  | 'biofilter-off'
+  | 'say-whether-biofilter'
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'
+  | 'buffer-the-bath'
+  | 'say-whether-buffered'
   | 'test-some-first'
   | 'declare-experience'
   | 'check-figure'

@@ -134,6 +134,8 @@ export interface CautionFacts {
     /** Volume, lot or order version other than at the last second calculation. */
     changedSinceLastCalculation: Fact<boolean>
     copperCourse: Fact<'not-started' | 'ramp' | 'hold'>
+    /** Bicarbonate goes into the bath with tricaine. */
+    isBuffered: Fact<boolean>
     spacing: Fact<DoseSpacing>
   }
   water: {
@@ -144,6 +146,8 @@ export interface CautionFacts {
     recentTemperaturesC: Fact<readonly TimedReading[]>
     oxygenMgPerL: Fact<number>
     pH: Fact<number>
+    /** Newest pH of each water that the animals are brought from; not applicable where they are treated at home. */
+    homePh: Fact<readonly TimedReading[]>
     alkalinityMgPerLCaCO3: Fact<number>
     hardnessMgPerLCaCO3: Fact<number>
     freeCopperMgPerL: Fact<number>
@@ -170,6 +174,8 @@ export interface CautionFacts {
     ozone: Fact<OnOff>
     uv: Fact<OnOff>
     foamFractionator: Fact<OnOff>
+    /** On: it stands in the connected water and runs. */
+    biofilter: Fact<OnOff>
     aeration: Fact<OnOff>
     lights: Fact<'full' | 'dimmed' | 'off'>
   }

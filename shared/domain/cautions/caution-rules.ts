@@ -16,9 +16,11 @@ import { carbon } from './rules/r14-carbon.ts'
 import { ozoneAndUv } from './rules/r15-ozone-and-uv.ts'
 import { foamFractionator } from './rules/r16-foam-fractionator.ts'
 import { chloroquine } from './rules/r17-chloroquine.ts'
+import { tricaine } from './rules/r18-tricaine.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
+import { methyleneBlue } from './rules/r25-methylene-blue.ts'
 import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
@@ -53,9 +55,11 @@ export const cautionRules: readonly CautionRule[] = [
   ozoneAndUv,
   foamFractionator,
   chloroquine,
+  tricaine,
   peroxideSpecies,
   chloramineWater,
   permanganate,
+  methyleneBlue,
   defaultRange,
   basis,
   doseSpacing,

@@ -14,7 +14,7 @@ import {
 } from './caution-rule.ts'
 import type { OrderRoute } from '../orders/order-route.ts'
 import { cautionRules } from './caution-rules.ts'
-import { normaliseFacts } from './normalise-facts.ts'
+import { isAskedIn, normaliseFacts } from './normalise-facts.ts'
 import { type ResolvedParameter, resolveParameters } from './resolve-parameters.ts'
 
 interface CautionFrame {
@@ -85,7 +85,7 @@ export interface CautionQuestion {
 export function evaluateCautions(question: CautionQuestion): CautionAnswer {
   const { stage, settings = {} } = question
   const facts = normaliseFacts(question.facts)
-  const factsAtSigning = question.factsAtSigning && normaliseFacts(question.factsAtSigning)
+  const { factsAtSigning } = question
   const cautions: Caution[] = []
   const conditions: CautionCondition[] = []
   for (const rule of cautionRules) {
@@ -141,12 +141,19 @@ function conditionOf(
   }
 }
 
-function hasChanged(rule: CautionRule, now: CautionFacts, then: CautionFacts | undefined): boolean {
-  if (!then) return false
+function hasChanged(rule: CautionRule, now: CautionFacts, signed: CautionFacts | undefined): boolean {
+  if (!signed) return false
+  const then = normaliseFacts(signed)
   return (
     now.agent !== then.agent ||
     now.route !== then.route ||
-    rule.uses.some((path) => JSON.stringify(factAt(now, path)) !== JSON.stringify(factAt(then, path)))
+    rule.uses.some((path) => {
+      const fact = factAt(now, path)
+      // what nobody asked for at the signature has changed only if it became so afterwards
+      return isAskedIn(signed, path)
+        ? JSON.stringify(fact) !== JSON.stringify(factAt(then, path))
+        : fact.state === 'known' && fact.at !== null && Date.parse(fact.at) > Date.parse(signed.at)
+    })
   )
 }
 

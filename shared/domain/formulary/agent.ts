@@ -36,6 +36,16 @@ export const agentCodes = [...immersionAgents, ...systemicAgents] as const
 export type AgentCode = (typeof agentCodes)[number]
 
 /**
+ * Whether a drug may be ordered into the water: it is one that is given so, or a line of the formulary that is in force
+ * says how much of it to a litre (an antibiotic that is injected is a bath for some animals).
+ *
+ * @source common practice, no source; that a line must be there: project default (P)
+ */
+export function isGivenInWater(agent: AgentCode, linesInForce: readonly { agent: AgentCode }[]): boolean {
+  return immersionAgents.some((one) => one === agent) || linesInForce.some((line) => line.agent === agent)
+}
+
+/**
  * Agents that are handled as hazards: strong oxidants, formaldehyde, copper stock.
  *
  * @source treatments reference, rule on second calculations: project default (P)

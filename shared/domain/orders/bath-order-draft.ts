@@ -31,6 +31,10 @@ export interface StatedFacts {
   hasBloom: boolean | null
   hasPlantsOrAlgae: boolean | null
   lights: 'full' | 'dimmed' | 'off' | null
+  /** Bicarbonate goes into the bath with tricaine; absent in orders written before it was asked for. */
+  isBuffered?: boolean | null | undefined
+  /** A biofilter stands in this water; absent in orders written before it was asked for. */
+  hasBiofilter?: boolean | null | undefined
   /** Taxa for which a veterinarian declares earlier experience with the agent here. */
   experienceWith: readonly string[]
 }

@@ -1,4 +1,4 @@
-import type { CautionFacts } from '../cautions/caution-facts.ts'
+import type { CautionFacts, OnOff } from '../cautions/caution-facts.ts'
 import { known, notApplicable, unknown } from '../cautions/fact.ts'
 import type { Fact } from '../cautions/fact.ts'
 import type { BathDose } from '../dose/bath-dose.ts'
@@ -18,6 +18,10 @@ const orUnknown = <T>(value: T | null, source: string): Fact<T> =>
   value === null ? unknown() : known(value, null, source)
 
 const stated = 'stated on the order'
+
+/** A machine that somebody says is there runs, as far as anybody knows. */
+const onOff = (isThere: boolean | null | undefined): OnOff | null =>
+  typeof isThere === 'boolean' ? (isThere ? 'on' : 'off') : null
 
 function targetFact({ target }: BathOrderDraft): CautionFacts['order']['target'] {
   const unit = findUnit(target.concentration.unit, {})
@@ -119,6 +123,7 @@ export function orderFacts(
       dosesStillIn: known(draft.given.stillIn, null, 'the order'),
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
+      isBuffered: orUnknown(said.isBuffered ?? null, stated),
       spacing:
         draft.intervalHours === null && draft.given.doses === 0
           ? notApplicable()
@@ -142,7 +147,11 @@ export function orderFacts(
       hasBloom: fill(base.water.hasBloom, said.hasBloom),
       hasPlantsOrAlgae: fill(base.water.hasPlantsOrAlgae, said.hasPlantsOrAlgae),
     },
-    lifeSupport: { ...base.lifeSupport, lights: fill(base.lifeSupport.lights, said.lights) },
+    lifeSupport: {
+      ...base.lifeSupport,
+      lights: fill(base.lifeSupport.lights, said.lights),
+      biofilter: fill(base.lifeSupport.biofilter, onOff(said.hasBiofilter)),
+    },
     animals: { ...base.animals, withoutExperience: experience },
   }
 }

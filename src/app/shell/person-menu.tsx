@@ -30,6 +30,7 @@ export function PersonMenu({ onKeyList, short }: { onKeyList: () => void; short:
     { to: paths.ownSettings(), words: frameWords.ownSettings, shown: true },
     { to: paths.people(), words: frameWords.people, shown: mayPeople.allowed },
     { to: paths.facility(), words: frameWords.facility, shown: mayFacility.allowed },
+    { to: paths.rules(), words: frameWords.rules, shown: true },
     { to: paths.audit(), words: frameWords.audit, shown: true },
     { to: paths.reports(), words: frameWords.reports, shown: true },
   ].filter((page) => page.shown && landedPages.has(page.to))

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import type { Product } from '../../../shared/contracts/formulary.contract.ts'
 import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import { isGivenInWater } from '../../../shared/domain/formulary/agent.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { agentNames, basisNames, waterKinds } from '../../../shared/messages/formulary.ts'
 import { lotStateNames } from '../../../shared/messages/formulary-screens.ts'
@@ -47,9 +48,8 @@ export function OrderFields({
   const { data } = useQuery(formularyQuery)
   const products = data?.products ?? []
   const product = products.find((one) => one.id === values.productId)
-  const lines = (data?.lines ?? []).filter(
-    (line) => line.agent === product?.agent && line.state !== 'proposed',
-  )
+  const linesInForce = (data?.lines ?? []).filter((line) => line.state !== 'proposed')
+  const lines = linesInForce.filter((line) => line.agent === product?.agent)
   const line = lines.find((one) => one.id === values.doseLineId)
   return (
     <>
@@ -80,7 +80,11 @@ export function OrderFields({
         id="productId"
         label={words.product}
         options={products
-          .filter((one) => (one.inUse && one.record === 'intact') || one.id === values.productId)
+          .filter(
+            (one) =>
+              one.id === values.productId ||
+              (one.inUse && one.record === 'intact' && isGivenInWater(one.agent, linesInForce)),
+          )
           .map((one) => ({
             value: one.id,
             name: agentNames[one.agent],

@@ -201,7 +201,12 @@ export function OrderForm({
           ) : null}
           <OrderFields {...shown} water={judged?.water} />
           <CourseFields {...shown} zone={zone} />
-          <StatedFields values={values} onChange={change} water={judged?.water} />
+          <StatedFields
+            values={values}
+            onChange={change}
+            water={judged?.water}
+            agent={formulary?.products.find(({ id }) => id === values.productId)?.agent}
+          />
           <WrongSummary
             fields={
               tried

@@ -1,4 +1,5 @@
 import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
+import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { SelectField } from '../../ui/select-field.tsx'
 import { Tick } from '../../ui/tick.tsx'
@@ -6,13 +7,22 @@ import type { FieldsProps } from './order-fields.tsx'
 
 type Stated = FieldsProps['values']['stated']
 const yesOrNo = ['oxygenIsLogged', 'hasBloom', 'hasPlantsOrAlgae'] as const
+/** Asked for one drug alone. */
+const ofAgent: Partial<Record<AgentCode, readonly ('isBuffered' | 'hasBiofilter')[]>> = {
+  tricaine: ['isBuffered'],
+  'methylene-blue': ['hasBiofilter'],
+}
 
 /** Facts that no ledger holds, stated by whoever writes; open until somebody says so. */
 export function StatedFields({
   values,
   onChange,
   water,
-}: Omit<FieldsProps, 'wrong'> & { water: OrderPreview['water'] | undefined }) {
+  agent,
+}: Omit<FieldsProps, 'wrong'> & {
+  water: OrderPreview['water'] | undefined
+  agent: AgentCode | undefined
+}) {
   const { stated } = values
   const set = (changes: Partial<Stated>) => onChange({ stated: { ...stated, ...changes } })
   const taxa = [...new Set((water?.animals ?? []).map((animal) => animal.scientificName))]
@@ -27,11 +37,11 @@ export function StatedFields({
           options={{ fresh: words.fresh, brackish: words.brackish, marine: words.marine }}
           onChange={(waterKind) => set({ waterKind })}
         />
-        {yesOrNo.map((name) => (
+        {[...yesOrNo, ...((agent && ofAgent[agent]) ?? [])].map((name) => (
           <Open
             key={name}
             label={words[name]}
-            value={stated[name] === null ? null : stated[name] ? 'yes' : 'no'}
+            value={typeof stated[name] === 'boolean' ? (stated[name] ? 'yes' : 'no') : null}
             options={{ yes: words.yes, no: words.no }}
             onChange={(answer) => set({ [name]: answer === null ? null : answer === 'yes' })}
           />

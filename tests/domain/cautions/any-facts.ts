@@ -96,6 +96,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     dosesStillIn: anyFact(fc.nat(5)),
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
+    isBuffered: anyFact(fc.boolean()),
     spacing: anyFact(
       fc.record({
         intervalHours: fc.constantFrom(0, 6, 24, 48, Number.NaN),
@@ -112,6 +113,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     recentTemperaturesC: anyFact(fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })),
     oxygenMgPerL: anyFact(figure),
     pH: anyFact(figure),
+    homePh: anyFact(fc.array(fc.record({ value: figure, at: instant }), { maxLength: 2 })),
     alkalinityMgPerLCaCO3: anyFact(figure),
     hardnessMgPerLCaCO3: anyFact(figure),
     freeCopperMgPerL: anyFact(figure),
@@ -150,6 +152,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     ozone: anyFact(onOff),
     uv: anyFact(onOff),
     foamFractionator: anyFact(onOff),
+    biofilter: anyFact(onOff),
     aeration: anyFact(onOff),
     lights: anyFact(fc.constantFrom('full' as const, 'dimmed' as const, 'off' as const)),
   }),

@@ -76,6 +76,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       dosesStillIn: known(0),
       changedSinceLastCalculation: known(false),
       copperCourse: known('not-started'),
+      isBuffered: known(true),
       spacing: known({
         intervalHours: 24,
         lastGivenAt: null,
@@ -90,6 +91,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       recentTemperaturesC: known([]),
       oxygenMgPerL: read(7.8),
       pH: read(8),
+      homePh: notApplicable(),
       alkalinityMgPerLCaCO3: read(120),
       hardnessMgPerLCaCO3: read(150),
       freeCopperMgPerL: read(0),
@@ -121,6 +123,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       ozone: known('off'),
       uv: known('off'),
       foamFractionator: known('off'),
+      biofilter: known('off'),
       aeration: known('on'),
       lights: known('dimmed'),
     },

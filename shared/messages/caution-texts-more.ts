@@ -1,0 +1,39 @@
+import type { CautionCode, CautionParams } from '../domain/cautions/caution-code.ts'
+import { counted } from './define-messages.ts'
+
+/** Parameters as a sentence gets them: figures, names and dates written out, bare counts still numbers. */
+type Said<P> = { [K in keyof P]: P[K] extends number ? number : string }
+export type CautionTexts = { [Code in CautionCode]: (params: Said<CautionParams[Code]>) => string }
+
+const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
+
+/** Titles of the rules on anaesthesia and on the biofilter. */
+export const moreCautionTitles = {
+  'tricaine-unbuffered': 'Tricaine without a buffer',
+  'tricaine-buffer-unknown': 'Nobody said whether the tricaine is buffered',
+  'tricaine-acid': 'The bath is too acid',
+  'tricaine-ph-unknown': 'The pH of the bath is not known',
+  'tricaine-ph-differs': 'The bath is not of the pH of the home water',
+  'tricaine-home-ph-unknown': 'The pH of the home water is not known',
+  'biofilter-on': 'Methylene blue with a biofilter on the water',
+  'biofilter-unknown': 'Whether a biofilter is on the water is not known',
+} satisfies Partial<Record<CautionCode, string>>
+
+/** Their sentences. */
+export const moreCautionTexts = {
+  'tricaine-unbuffered': () =>
+    'Tricaine is a strong acid, and the order says that the bath is not buffered. In sea water too the pH falls far.',
+  'tricaine-buffer-unknown': () =>
+    'Tricaine is a strong acid, and the order does not say whether the bath is buffered.',
+  'tricaine-acid': (p) => `The bath reads ${p.reading}, below ${p.limit}.`,
+  'tricaine-ph-unknown': (p) =>
+    `The bath was not measured within ${hours(p.maxAgeHours)}. Tricaine makes it acid; below ${p.limit} nothing is put into it.`,
+  'tricaine-ph-differs': (p) =>
+    `The bath reads ${p.reading}, the water that the animals come from ${p.home}: more than ${p.limit} apart.`,
+  'tricaine-home-ph-unknown': (p) =>
+    `The water that the animals come from was not measured within ${hours(p.maxAgeHours)} on the same scale. The bath may differ from it by ${p.limit} at most.`,
+  'biofilter-on': () =>
+    'A biofilter runs on the connected water. Methylene blue stops it, and ammonia and nitrite rise.',
+  'biofilter-unknown': () =>
+    'The life support of this water has no biofilter that was recorded as on or off, and the order does not say whether there is one. Methylene blue stops it.',
+} satisfies Partial<CautionTexts>

@@ -1,0 +1,1 @@
+export { RulesSheet } from './rules-sheet.tsx'
