@@ -263,7 +263,7 @@ describe.each([desk, phone])('orders at $width px', (size) => {
 
   it('cannot be signed with a licence that ended, and says so', async () => {
     const page = await signedIn('vet2', size, `/orders/${numbers.draft}/edit`)
-    await page.getByText(/Licence VL-19002 ended on 30.Sep.2026/).waitFor()
+    await page.getByText(/licence VL-19002 \(Norrell Sound\) ended on 30.Sep.2026/).waitFor()
     const sign = page.getByRole('button', { name: 'Sign order' })
     expect(await sign.getAttribute('aria-disabled')).toBe('true')
     expect(await page.getByLabel('Your password').count()).toBe(0)
