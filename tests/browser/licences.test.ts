@@ -198,7 +198,7 @@ describe.each([
       .getByText(/Your licence VL-41 \(Norrell Sound\) ended on 30.Nov.2026/)
       .first()
       .waitFor()
-    expect(await signing.getByLabel('Your password').count()).toBe(0)
+    await signing.getByLabel('Your password').waitFor({ state: 'detached' })
     await expectSound(page, `sign-ended-${suffix}`)
   })
 

@@ -24,18 +24,21 @@ export function LicenceList({
   const standing = person.licences.filter((one) => !isGone(one))
   const earlier = person.licences.filter(isGone)
   const done = () => setActing(null)
+  const entry = (licence: Licence) => (
+    <LicenceEntry
+      key={licence.id}
+      personId={person.id}
+      licence={licence}
+      onAct={(act) => setActing({ act, licence })}
+    />
+  )
   const line = (licence: Licence) =>
     acting?.act === 'correct' && acting.licence.id === licence.id ? (
       <li key={licence.id}>
         <CorrectLicenceForm personId={person.id} licence={licence} onDone={done} onUnsaved={onUnsaved} />
       </li>
     ) : (
-      <LicenceEntry
-        key={licence.id}
-        personId={person.id}
-        licence={licence}
-        onAct={(act) => setActing({ act, licence })}
-      />
+      entry(licence)
     )
   return (
     <section className="stack" aria-labelledby="licences">
@@ -58,7 +61,7 @@ export function LicenceList({
       {earlier.length > 0 ? (
         <>
           <h3 className="t-label">{words.earlier({ count: earlier.length })}</h3>
-          <ul className="stack">{earlier.map(line)}</ul>
+          <ul className="stack">{earlier.map(entry)}</ul>
         </>
       ) : null}
       {acting?.act === 'void' ? (
