@@ -4,6 +4,8 @@ import { counted, defineMessages } from './define-messages.ts'
 interface ConditionParams {
   floor: string
   maxAgeMinutes: number
+  maxAgeHours: number
+  limit: string
   tests: string
   ozone: number
   uv: number
@@ -18,6 +20,8 @@ export const cautionConditions = defineMessages({
   R15: (p) =>
     p.ozone && p.uv ? 'Ozone and ultraviolet lamp off' : p.uv ? 'Ultraviolet lamp off' : 'Ozone off',
   R16: () => 'Foam fractionator off',
+  R30: (p) =>
+    `Ammonia and nitrite read within ${counted(p.maxAgeHours, 'hour', 'hours')} and not rising, un-ionised ammonia nitrogen at most ${p.limit}`,
   R31: (p) => `Water tested: ${p.tests}`,
   R34: () => 'Lot neither expired, recalled nor set aside',
   R39: () => 'Second calculation by another person, blind, where it is due',

@@ -30,8 +30,10 @@ export const cautionReasonWords = defineMessages({
   R27: 'Product, salt, base and free forms differ by factors of two to four: a bare figure is not a dose.',
   R28: 'Doses given too early add up in the animal; those given too late leave gaps.',
   R29: 'Drugs in one water add up, and some of them react with each other.',
+  R30: 'Where a drug harms the biofilter, ammonia and nitrite rise within days, and harm the animals more than what was treated.',
   R31: 'A dose that rests on an old test rests on other water.',
   R32: 'An error of the volume is the same error of the dose.',
+  R33: 'An error of the weight is the same error of the dose.',
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
   R39: 'Another person, working from the label and the container, finds a tenfold error, the wrong water and the wrong bottle.',
   R41: 'Weak or lately handled animals bear a treatment badly.',
@@ -54,4 +56,5 @@ export const orderRouteWords = defineMessages({
 /** What a rule may bring besides its level. */
 export const cautionEffectWords = defineMessages({
   secondCalculation: 'a second calculation by another person',
+  task: 'work to do: ammonia and nitrite tested every 12 hours, less fed, water changed',
 } satisfies Record<CautionEffect['kind'], string>)

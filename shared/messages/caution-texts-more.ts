@@ -17,6 +17,11 @@ export const moreCautionTitles = {
   'tricaine-home-ph-unknown': 'The pH of the home water is not known',
   'biofilter-on': 'Methylene blue with a biofilter on the water',
   'biofilter-unknown': 'Whether a biofilter is on the water is not known',
+  'nitrogen-unknown': 'Ammonia or nitrite is not known',
+  'nitrogen-before-unknown': 'Nothing to hold ammonia or nitrite against',
+  'nitrogen-rising': 'Ammonia or nitrite is rising',
+  'unionised-ammonia-high': 'Un-ionised ammonia is high',
+  'unionised-ammonia-unknown': 'Un-ionised ammonia is not known',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -36,4 +41,14 @@ export const moreCautionTexts = {
     'A biofilter runs on the connected water. Methylene blue stops it, and ammonia and nitrite rise.',
   'biofilter-unknown': () =>
     'The life support of this water has no biofilter that was recorded as on or off, and the order does not say whether there is one. Methylene blue stops it.',
+  'nitrogen-unknown': (p) =>
+    `The biofilter suffers under this drug, and ${p.reading} was not read within ${hours(p.maxAgeHours)}.`,
+  'nitrogen-before-unknown': (p) =>
+    `The biofilter suffers under this drug. There is no earlier reading of ${p.reading} to tell a rise by.`,
+  'nitrogen-rising': (p) =>
+    `The biofilter suffers under this drug. The newest reading of ${p.reading} is ${p.value}, more than ${p.factor} times the ${p.before} of the days before. Test every 12 hours, feed less and change water.`,
+  'unionised-ammonia-high': (p) =>
+    `Un-ionised ammonia nitrogen works out to ${p.value}, above ${p.limit}. Test every 12 hours, feed less and change water.`,
+  'unionised-ammonia-unknown': (p) =>
+    `Temperature and pH of the day or the salinity are missing, so nobody can say whether un-ionised ammonia nitrogen is at most ${p.limit}.`,
 } satisfies Partial<CautionTexts>

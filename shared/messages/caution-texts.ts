@@ -139,6 +139,11 @@ export const cautionTitles = defineMessages({
   'volume-estimated-error-unknown': 'Volume is estimated without an error',
   'volume-error-large': 'Volume is not known closely',
   'volume-differs': 'Volume differs much from the one before',
+  'weight-unknown': 'Weight is not known',
+  'weight-missing': 'Never weighed',
+  'weight-old': 'Weight is old',
+  'weight-implausible': 'Weight is not plausible',
+  'weight-estimated': 'Weight was reckoned, not weighed',
   'lot-expired': 'Lot has expired',
   'lot-expiry-unknown': 'Expiry of the lot is not known',
   'lot-recalled': 'Lot was recalled',
@@ -354,6 +359,13 @@ export const cautionTexts = defineMessages({
     `The volume has an error of ${p.errorPercent} %, more than ${p.limitPercent} %. The dose is wrong by as much.`,
   'volume-differs': (p) =>
     `The volume of ${p.determinedOn} is ${p.now}; before, ${p.before} was confirmed for the same water. A figure so far off is often a slip of the decimal point.`,
+  'weight-unknown': () => 'It is not known what the animals weigh. Without a weight there is no amount.',
+  'weight-missing': (p) => `There is no weight of ${p.animals}. Without one there is no amount.`,
+  'weight-old': (p) =>
+    `The newest weight is more than ${counted(p.limitDays, 'day', 'days')} old: ${p.animals}. The dose is wrong by whatever was gained or lost since.`,
+  'weight-implausible': (p) =>
+    `The weight lies outside what such an animal weighs: ${p.animals}. A slip of the decimal point is the same slip of the dose.`,
+  'weight-estimated': (p) => `The weight was reckoned, not weighed: ${p.animals}.`,
   'lot-expired': (p) => `The lot expired on ${p.expiresOn}.`,
   'lot-expiry-unknown': () => 'The lot has no expiry date on record.',
   'lot-recalled': () => 'The lot was recalled.',

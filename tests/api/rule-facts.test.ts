@@ -10,6 +10,7 @@ import {
   readingsNow,
   signDraft,
 } from '../builders/an-order.ts'
+import { aFormalinHouse } from '../builders/a-bath.ts'
 import { startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -60,8 +61,8 @@ describe('a tricaine bath in a tub', () => {
               fill_mark_entered_unit = 'L', fill_mark_litres = 2000 WHERE id = $1`,
       [tub.id],
     )
-    const home = await aBathWater(api, 'QT-1')
-    const school = await aSchool(api, home.id, 1)
+    const home = await aBathWater(api, 'HM-1')
+    const school = await aSchool(api, home.id, 11)
     const tricaine = await aProduct(api, {
       agent: 'tricaine',
       productName: 'Tricaine',
@@ -115,8 +116,8 @@ describe('a tricaine bath in a tub', () => {
   })
 
   it('where the animals live has no other water to differ from', async () => {
-    const tank = await aBathWater(api, 'QT-2')
-    const school = await aSchool(api, tank.id, 2)
+    const tank = await aBathWater(api, 'HM-2')
+    const school = await aSchool(api, tank.id, 12)
     const { id, lotId } = await aProduct(api, {
       agent: 'tricaine',
       productName: 'Tricaine 2',
@@ -145,7 +146,7 @@ describe('a tricaine bath in a tub', () => {
 describe('methylene blue', () => {
   it('asks the life support for a biofilter, and the order where it lists none', async () => {
     const tank = await aBathWater(api, 'QT-MB')
-    const school = await aSchool(api, tank.id, 3)
+    const school = await aSchool(api, tank.id, 13)
     const blue = await aProduct(api, {
       agent: 'methylene-blue',
       productName: 'Methylene blue',
@@ -174,5 +175,39 @@ describe('methylene blue', () => {
     await (await api.as('technician')).agent.post('/api/life-support').send(unit).expect(201)
     // what the ledger knows stands against what anybody says
     expect(await said(false)).toEqual(['stop biofilter-on'])
+  })
+})
+
+describe('ammonia under formalin', () => {
+  it('is read from the ledger of readings: the newest, those before, and its un-ionised part', async () => {
+    const house = await aFormalinHouse(api)
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    const unread = ['warning nitrogen-unknown', 'warning nitrogen-unknown']
+    expect(await atDose('R30', number)).toEqual(unread)
+    const nitrogen = (ammonia: string, nitrite: string, at: string) =>
+      readingsNow(
+        api,
+        bath.tank.waterBodyId,
+        { 'total-ammonia-n': [ammonia, 'mg/L'], 'nitrite-n': [nitrite, 'mg/L'] },
+        at,
+      )
+    await nitrogen('0.5', '0.02', '2026-12-01T08:00:00Z')
+    expect(await atDose('R30', number)).toEqual([
+      'warning nitrogen-before-unknown',
+      'warning nitrogen-before-unknown',
+      'warning unionised-ammonia-unknown',
+    ])
+    await nitrogen('0.5', '0.02', '2026-11-29T08:00:00Z')
+    // 20.4 °C, pH 8.1, 33.1: some 4 percent of 0.5 mg/L, well below 0.05
+    await house.freshWater(bath)
+    expect(await atDose('R30', number)).toEqual([])
+    // of 2 mg/L as well it is more than 0.05
+    await nitrogen('2', '0.05', '2026-12-01T18:11:00Z')
+    expect(await atDose('R30', number)).toEqual([
+      'warning nitrogen-rising',
+      'warning nitrogen-rising',
+      'warning unionised-ammonia-high',
+    ])
   })
 })

@@ -13,6 +13,8 @@ export const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][num
   'read-copper': 'readings',
   'read-water': 'readings',
   'correct-water': 'readings',
+  'test-nitrogen': 'readings',
+  'biofilter-off': 'water',
   'part-the-water': 'water',
   'move-animals': 'water',
   'record-inhabitants': 'water',

@@ -19,6 +19,8 @@ import { readAgentHistory } from './agent-history.ts'
 import { readExperiencedTaxa } from './agent-history.reads.ts'
 import { readCondition } from './condition.ts'
 import { readHomePh } from './home-ph.ts'
+import { readNitrogenFacts } from './nitrogen-facts.ts'
+import type { NitrogenFacts } from './nitrogen-facts.ts'
 import type { ConditionParts } from './condition.ts'
 
 /** Salinities that part the kinds of water. Project default: no outside authority. */
@@ -108,6 +110,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
         db,
       )
       const exceptInto = isVessel(water) ? water.enclosureId : null
+      const nitrogen = await readNitrogenFacts(parts.water, water, at, db)
       const homePh =
         agent === 'tricaine'
           ? await readHomePh(parts, { water, animals: withThoseToCome, named: options.named ?? [] }, at, db)
@@ -120,7 +123,7 @@ export function createBathFactsReader(parts: BathFactsParts) {
       const base: BathFacts = {
         at: at.toISOString(),
         zone,
-        water: { ...waterFacts(water, temperatures), homePh },
+        water: { ...waterFacts(water, temperatures), homePh, ...nitrogen },
         animals: {
           inWater: known(animals.map(animalInWater), at.toISOString(), 'the register of animals'),
           unwellPercent: lookFact(condition.unwellPercent),
@@ -201,7 +204,7 @@ function waterKind(water: WaterFacts): CautionFacts['water']['kind'] {
 function waterFacts(
   water: WaterFacts,
   temperatures: readonly { canonicalValue: number; at: string }[],
-): Omit<CautionFacts['water'], 'homePh'> {
+): Omit<CautionFacts['water'], 'homePh' | keyof NitrogenFacts> {
   return {
     kind: waterKind(water),
     temperatureC: readingFact(water, 'temperature', 'degC'),

@@ -149,6 +149,16 @@ export interface CautionParams {
   'plan-long': { days: number; limitDays: number }
   'doses-carried': { given: number; planned: number; lastAt: string; startsAt: string }
   'plan-counts-given': { given: number; planned: number; lastAt: string; startsAt: string }
+  'nitrogen-unknown': { reading: ReadingName; maxAgeHours: number }
+  'nitrogen-before-unknown': { reading: ReadingName }
+  'nitrogen-rising': {
+    reading: ReadingName
+    value: CautionQuantity
+    before: CautionQuantity
+    factor: number
+  }
+  'unionised-ammonia-high': { value: CautionQuantity; limit: CautionQuantity }
+  'unionised-ammonia-unknown': { limit: CautionQuantity }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -159,6 +169,11 @@ export interface CautionParams {
   'volume-estimated-error-unknown': { limitPercent: number }
   'volume-error-large': { errorPercent: number; limitPercent: number }
   'volume-differs': { now: CautionQuantity; before: CautionQuantity; determinedOn: string }
+  'weight-unknown': Record<never, never>
+  'weight-missing': { animals: readonly string[] }
+  'weight-old': { animals: readonly string[]; limitDays: number }
+  'weight-implausible': { animals: readonly string[] }
+  'weight-estimated': { animals: readonly string[] }
   'lot-expired': { expiresOn: string }
   'lot-expiry-unknown': Record<never, never>
   'lot-recalled': Record<never, never>
@@ -230,6 +245,9 @@ export type ResolveCode =
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'
+  | 'test-nitrogen'
+  | 'feed-less'
+  | 'change-water'
   | 'buffer-the-bath'
   | 'say-whether-buffered'
   | 'test-some-first'
@@ -246,6 +264,7 @@ export type ResolveCode =
   | 'check-start'
   | 'check-plan'
   | 'determine-volume'
+  | 'weigh-animals'
   | 'calculate-again-by-another'
   | 'let-animals-rest'
   | 'look-at-animals'

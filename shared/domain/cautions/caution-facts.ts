@@ -51,6 +51,8 @@ export interface WeightFact {
   animalId: string
   /** Accession number, for the sentence. */
   label: string
+  taxonGroup: TaxonGroup
+  lifeStage: LifeStage
   grams: number
   at: Instant
   /** Measured on a balance, or reckoned. */
@@ -152,6 +154,14 @@ export interface CautionFacts {
     hardnessMgPerLCaCO3: Fact<number>
     freeCopperMgPerL: Fact<number>
     totalCopperMgPerL: Fact<number>
+    /** The newest, as nitrogen. */
+    totalAmmoniaNMgPerL: Fact<number>
+    nitriteNMgPerL: Fact<number>
+    /** Worked out from the newest ammonia, temperature, pH and salinity. */
+    unionisedAmmoniaNMgPerL: Fact<number>
+    /** Readings of the days before the newest, mg/L as nitrogen. */
+    earlierTotalAmmoniaN: Fact<readonly TimedReading[]>
+    earlierNitriteN: Fact<readonly TimedReading[]>
     oxygenIsLogged: Fact<boolean>
     hasBloom: Fact<boolean>
     hasPlantsOrAlgae: Fact<boolean>
@@ -165,6 +175,8 @@ export interface CautionFacts {
     withoutExperience: Fact<readonly string[]>
     /** Newest weights of those who are treated; whoever was never weighed is not among them. */
     weights: Fact<readonly WeightFact[]>
+    /** Those who are treated and were never weighed; absent in orders signed before weights were asked for. */
+    neverWeighed?: Fact<readonly string[]>
   }
   volume: {
     determination: Fact<VolumeFact>

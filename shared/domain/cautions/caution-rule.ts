@@ -39,8 +39,10 @@ export const cautionRuleIds = [
   'R27',
   'R28',
   'R29',
+  'R30',
   'R31',
   'R32',
+  'R33',
   'R34',
   'R39',
   'R41',
@@ -53,10 +55,13 @@ export const cautionRuleIds = [
 export type CautionRuleId = (typeof cautionRuleIds)[number]
 
 /** Something that a caution brings with it besides its level. */
-export type CautionEffect = { kind: 'secondCalculation' }
+export type CautionEffect =
+  | { kind: 'secondCalculation' }
+  /** Ammonia and nitrite are watched, less is fed, water is changed. */
+  | { kind: 'task' }
 
 /** The rules that are judged only at the start: on an order each is a condition. */
-export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R31', 'R34', 'R39', 'R41'] as const
+export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R30', 'R31', 'R34', 'R39', 'R41'] as const
 export type StartRuleId = (typeof startRuleIds)[number]
 
 /** Thresholds by name; one name means the same in every rule, so one catalogue words them all. */
@@ -103,6 +108,9 @@ export const ruleParameterKeys = [
   'untimedBathMinutes',
   'lowFactor',
   'veryEarlyFactor',
+  'risesFactor',
+  'unionisedMgPerL',
+  'nitrogenMaxAgeHours',
   'oxygenMinutes',
   'temperatureAndPhHours',
   'alkalinityAndHardnessHours',
@@ -112,6 +120,11 @@ export const ruleParameterKeys = [
   'stopErrorPercent',
   'differsFactor',
   'differsStopFactor',
+  'neonateDays',
+  'birdDays',
+  'growingDays',
+  'adultDays',
+  'weightStopFactor',
   'volumeLitres',
   'amountGrams',
   'amountMillilitres',

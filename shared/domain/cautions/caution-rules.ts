@@ -25,8 +25,10 @@ import { defaultRange } from './rules/r26-default-range.ts'
 import { basis } from './rules/r27-basis.ts'
 import { doseSpacing } from './rules/r28-dose-spacing.ts'
 import { otherAgents } from './rules/r29-other-agents.ts'
+import { nitrogenRises } from './rules/r30-nitrogen-rises.ts'
 import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
+import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
@@ -64,8 +66,10 @@ export const cautionRules: readonly CautionRule[] = [
   basis,
   doseSpacing,
   otherAgents,
+  nitrogenRises,
   staleReadings,
   volume,
+  weights,
   lot,
   secondCalculation,
   weakAnimals,

@@ -9,6 +9,11 @@ export const askedLater = [
   'order.isBuffered',
   'water.homePh',
   'lifeSupport.biofilter',
+  'water.totalAmmoniaNMgPerL',
+  'water.nitriteNMgPerL',
+  'water.unionisedAmmoniaNMgPerL',
+  'water.earlierTotalAmmoniaN',
+  'water.earlierNitriteN',
 ] as const satisfies readonly FactPath[]
 
 function withAskedLater(facts: CautionFacts): CautionFacts {

@@ -7,6 +7,8 @@ export const readingNames = [
   'hardness',
   'free-copper',
   'total-copper',
+  'total-ammonia',
+  'nitrite',
 ] as const
 
 export type ReadingName = (typeof readingNames)[number]

@@ -49,6 +49,8 @@ export const readingFacts: Record<ReadingName, FactPath> = {
   hardness: 'water.hardnessMgPerLCaCO3',
   'free-copper': 'water.freeCopperMgPerL',
   'total-copper': 'water.totalCopperMgPerL',
+  'total-ammonia': 'water.totalAmmoniaNMgPerL',
+  nitrite: 'water.nitriteNMgPerL',
 }
 
 /** The reading of a name. */
@@ -62,6 +64,8 @@ export function readingFact(facts: CautionFacts, name: ReadingName): Fact<number
     hardness: water.hardnessMgPerLCaCO3,
     'free-copper': water.freeCopperMgPerL,
     'total-copper': water.totalCopperMgPerL,
+    'total-ammonia': water.totalAmmoniaNMgPerL,
+    nitrite: water.nitriteNMgPerL,
   }
   return all[name]
 }

@@ -42,7 +42,7 @@ const storageFaults = ['stored-cold', 'precipitate']
  *
  * @source common practice for the day of use, no source
  */
-function storageFault({ lot }: ChosenProduct, { at, zone }: BathFacts): Fact<boolean> {
+function storageFault({ lot }: ChosenProduct, { at, zone }: Pick<BathFacts, 'at' | 'zone'>): Fact<boolean> {
   if (!lot) return unknown()
   if (storageFaults.includes(lot.state)) return known(true, null, 'the lot')
   const { foundClearAt } = lot
@@ -51,7 +51,8 @@ function storageFault({ lot }: ChosenProduct, { at, zone }: BathFacts): Fact<boo
     : unknown()
 }
 
-function lotFacts(chosen: ChosenProduct, base: BathFacts): CautionFacts['lot'] {
+/** What is known of the lot at the instant judged. */
+export function lotFacts(chosen: ChosenProduct, base: Pick<BathFacts, 'at' | 'zone'>): CautionFacts['lot'] {
   const { lot, product } = chosen
   const density =
     product.density === undefined ? null : parseQuantity(product.density, { dimension: 'density', above: 0 })

@@ -49,6 +49,8 @@ const animal = fc.record({
 const weight = fc.record({
   animalId: fc.uuid(),
   label: fc.constant('HP-0001'),
+  taxonGroup: fc.constantFrom(...taxonGroupNames),
+  lifeStage: fc.constantFrom('egg' as const, 'fry' as const, 'adult' as const, 'unknown' as const),
   grams: figure,
   at: instant,
   measured: fc.boolean(),
@@ -71,6 +73,8 @@ const range = fc.record({
   water: fc.constantFrom('fresh' as const, 'marine' as const, 'both' as const),
   stays: fc.boolean(),
 })
+
+const timed = fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })
 
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
@@ -118,6 +122,11 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     hardnessMgPerLCaCO3: anyFact(figure),
     freeCopperMgPerL: anyFact(figure),
     totalCopperMgPerL: anyFact(figure),
+    totalAmmoniaNMgPerL: anyFact(figure),
+    nitriteNMgPerL: anyFact(figure),
+    unionisedAmmoniaNMgPerL: anyFact(figure),
+    earlierTotalAmmoniaN: anyFact(timed),
+    earlierNitriteN: anyFact(timed),
     oxygenIsLogged: anyFact(fc.boolean()),
     hasBloom: anyFact(fc.boolean()),
     hasPlantsOrAlgae: anyFact(fc.boolean()),
@@ -128,6 +137,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     handledInLast24h: anyFact(fc.boolean()),
     withoutExperience: anyFact(fc.array(fc.constant('Genus species'), { maxLength: 2 })),
     weights: anyFact(fc.array(weight, { maxLength: 3 })),
+    neverWeighed: anyFact(fc.array(fc.constant('HP-0002'), { maxLength: 2 })),
   }),
   volume: fc.record({
     determination: anyFact(

@@ -96,6 +96,11 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       hardnessMgPerLCaCO3: read(150),
       freeCopperMgPerL: read(0),
       totalCopperMgPerL: read(0),
+      totalAmmoniaNMgPerL: read(0.02),
+      nitriteNMgPerL: read(0.02),
+      unionisedAmmoniaNMgPerL: read(0.001),
+      earlierTotalAmmoniaN: known([{ value: 0.02, at: minutesAgo(1440) }]),
+      earlierNitriteN: known([{ value: 0.02, at: minutesAgo(1440) }]),
       oxygenIsLogged: known(true),
       hasBloom: known(false),
       hasPlantsOrAlgae: known(false),
@@ -106,6 +111,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       handledInLast24h: known(false),
       withoutExperience: known([]),
       weights: notApplicable(),
+      neverWeighed: notApplicable(),
     },
     volume: {
       determination: known({
