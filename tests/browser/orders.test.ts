@@ -133,7 +133,6 @@ describe.each([desk, phone])('orders at $width px', (size) => {
     const page = await signedIn('keeper', size, '/orders')
     await page.getByRole('link', { name: numbers.signed }).waitFor()
     await expectSound(page, 'the list of orders')
-    await picture(page, `orders-${String(size.width)}`)
     expect(await page.getByText('This is for a veterinarian or a technician.').isVisible()).toBe(true)
 
     if (size === phone) await page.getByText('Filters', { exact: true }).click()
