@@ -150,14 +150,12 @@ describe('while signing is locked after five wrong passwords', () => {
     const vet = await lockedVet()
     const dose = api.nextId()
     await house.record(number, { id: dose, happenedAt: '2026-12-01T18:10:00Z' }, vet).expect(201)
-    const stopped = await vet.agent
-      .post(`/api/doses/${dose}/stop`)
-      .send({
-        id: api.nextId(),
-        cause: 'stopped',
-        reason: 'a fish on its side',
-        happenedAt: '2026-12-01T18:19:00Z',
-      })
+    const stopped = await vet.agent.post(`/api/doses/${dose}/stop`).send({
+      id: api.nextId(),
+      cause: 'stopped',
+      seen: 'a fish on its side',
+      happenedAt: '2026-12-01T18:19:00Z',
+    })
     expect([stopped.status, stopped.body.recorded?.[0]?.stop?.at]).toEqual([201, '2026-12-01T18:19:00.000Z'])
     const withheld = await house.signedBath(await house.tankWithSchool())
     await house.record(withheld, { kind: 'withheld', amount: null, lotId: null }, vet).expect(201)
