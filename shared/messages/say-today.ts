@@ -83,9 +83,11 @@ const titles = defineMessages({
   'account-without-licence': (t: Told) => `${t.text('name')} has no valid licence`,
   'licence-ends': (t: Told) => `${t.text('name')}: ${sayEnd(t)}`,
   'signing-locked': (t: Told) =>
-    t.has('running')
-      ? `Signing of ${t.text('name')} is locked until ${t.moment(t.text('until'))}`
-      : `Signing of ${t.text('name')} was locked, ${t.moment(t.text('since'))} to ${t.moment(t.text('until'))}`,
+    !t.has('until') || !t.has('since')
+      ? `Signing of ${t.text('name')} was locked`
+      : t.has('running')
+        ? `Signing of ${t.text('name')} is locked until ${t.moment(t.text('until'))}`
+        : `Signing of ${t.text('name')} was locked, ${t.moment(t.text('since'))} to ${t.moment(t.text('until'))}`,
   'account-without-sign-in': (t: Told) => `${t.text('name')} has never signed in`,
   'setting-proposed': (t: Told) => `Confirm: ${settingNames[t.text('key') as SettingKey]}`,
   'settings-default': (t: Told) =>
