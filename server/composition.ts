@@ -62,7 +62,8 @@ export function compose(outside: Outside) {
   }
   const facility = createFacility(parts)
   const lockout = createLockout(parts)
-  const people = createPeople({ ...parts, facility: facility.service, lockout })
+  const documents = createDocuments(parts)
+  const people = createPeople({ ...parts, facility: facility.service, documents })
   const authenticator = createAuthenticator(people)
   const readMe = createMeReader({ people, facility: facility.service, demo: outside.demo })
   const signer = createSigner(path.join(outside.dataFolder, 'keys'))
@@ -72,7 +73,6 @@ export function compose(outside: Outside) {
   const water = createWater({ ...parts, facility: facility.service, enclosures })
   const formulary = createFormulary({ ...parts, facility: facility.service, people })
   const animals = createAnimals({ ...parts, facility: facility.service, water })
-  const documents = createDocuments(parts)
   const quarantine = createQuarantine({
     ...parts,
     facility: facility.service,

@@ -15,6 +15,7 @@ import { permitEntities } from './features/permits/index.ts'
 import { quarantineEntities } from './features/quarantine/index.ts'
 import { signingEntities } from './features/signing/index.ts'
 import { waterEntities } from './features/water/index.ts'
+import { SigningLockRow } from './platform/sign-in/signing-lock.entity.ts'
 
 /** Every mapped table; each feature names its own. */
 export const entities = [
@@ -24,6 +25,7 @@ export const entities = [
   ...facilityEntities,
   ...peopleEntities,
   ...signingEntities,
+  SigningLockRow,
   ...enclosureEntities,
   ...waterEntities,
   ...formularyEntities,

@@ -1,3 +1,5 @@
+import type { LicenceClass } from '../../shared/domain/licences/licence-classes.ts'
+import { addDays, facilityDateOf } from '../../shared/domain/time/facility-date.ts'
 import type { Role } from '../../shared/domain/permissions/roles.ts'
 import type { SettingKey } from '../../shared/domain/settings/settings.ts'
 import type { Composition } from '../composition.ts'
@@ -21,7 +23,7 @@ export const demoPeople = {
 export type DemoPerson = keyof typeof demoPeople
 export type DemoActors = Record<DemoPerson, Actor & { personId: string }>
 
-const facilitySettings: Partial<Record<SettingKey, string>> = {
+const facilitySettings = {
   'facility.name': 'Harrow Point Sea Hall',
   'facility.address': '4 Breakwater Road, Harrow Point, Norrell Sound',
   'facility.zone': 'America/Halifax',
@@ -29,7 +31,7 @@ const facilitySettings: Partial<Record<SettingKey, string>> = {
   'facility.gallon': 'us',
   'numbers.accession': 'HP-{0000}',
   'notices.on-call': `Dr Ilse Marrow | +1 555 0160 | vet@${mailDomain}, Dr Piers Oland | +1 555 0161 | vet2@${mailDomain}`,
-}
+} satisfies Partial<Record<SettingKey, string>>
 
 const yearsFrom = (at: Date, years: number) =>
   `${String(at.getUTCFullYear() + years)}-${String(at.getUTCMonth() + 1).padStart(2, '0')}-01`
@@ -53,15 +55,25 @@ export async function seedPeople({ people, facility, parts }: Composition): Prom
   }
   const entered = actors as DemoActors
   const now = parts.clock.now()
-  const licence = (who: DemoPerson, number: string, validFrom: string, validUntil: string) =>
+  const today = facilityDateOf(now.toISOString(), facilitySettings['facility.zone'])
+  const licence = (
+    who: DemoPerson,
+    number: string,
+    validFrom: string,
+    validUntil: string,
+    of: LicenceClass = 'veterinary',
+  ) =>
     people.service.enterLicence({ actor: entered.admin, requestId: 'demo' }, entered[who].personId, {
       id: parts.ids.next(),
+      class: of,
       jurisdiction: 'Norrell Sound',
       number,
       validFrom,
       validUntil,
     })
   await licence('vet', 'VL-20417', yearsFrom(now, -2), yearsFrom(now, 2))
+  // ends soon: shown on Today, and renewed by the administrator when practising
+  await licence('vet', 'CS-3391', yearsFrom(now, -2), addDays(today, 25), 'controlled-substance')
   await licence('vet2', 'VL-18830', yearsFrom(now, -4), yearsFrom(now, -1))
 
   for (const [key, value] of Object.entries(facilitySettings) as [SettingKey, string][]) {

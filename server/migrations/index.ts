@@ -32,6 +32,7 @@ import { ContactsNeedAnEnd1764600000050 } from './0050-contacts-need-an-end.ts'
 import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
 import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
 import { WeakAndHandled1764600000053 } from './0053-weak-and-handled.ts'
+import { LicencesAndSigningLocks1764600000055 } from './0055-licences-and-signing-locks.ts'
 import { RuleParameters1764600000059 } from './0059-rule-parameters.ts'
 import { FoodOrRelease1764600000062 } from './0062-food-or-release.ts'
 import { AdverseEvents1764600000063 } from './0063-adverse-events.ts'
@@ -73,6 +74,7 @@ export const migrations = [
   StandingLockLifts1764600000051,
   LiftsOneByOne1764600000052,
   WeakAndHandled1764600000053,
+  LicencesAndSigningLocks1764600000055,
   RuleParameters1764600000059,
   FoodOrRelease1764600000062,
   AdverseEvents1764600000063,

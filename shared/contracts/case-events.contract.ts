@@ -3,6 +3,7 @@ import { contract } from './contract.ts'
 import { Reason, RecordId } from './primitives.ts'
 import { caseParams, CaseDetail } from './quarantine.contract.ts'
 import { HappenedAt } from './quarantine-primitives.ts'
+import { ChosenLicence } from './signing.contract.ts'
 
 const Words = z.string().trim().max(2000).describe('In words')
 const base = { id: RecordId, happenedAt: HappenedAt, note: Words.optional() }
@@ -214,9 +215,10 @@ export const signDeathCause = contract({
       .enum(['explained-not-transmissible', 'explained-transmissible', 'unexplained'])
       .describe('What was found'),
     cause: z.string().trim().min(3).max(500).describe('The cause, in words'),
+    licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('Password of the signer, again'),
   }),
   reply: { 200: CaseDetail },
-  problems: ['not-found', 'licence-not-valid', 'password-wrong', 'sign-in-locked'],
+  problems: ['not-found', 'licence-not-valid', 'licence-not-chosen', 'password-wrong', 'sign-in-locked'],
   idempotent: 'by-key',
 })

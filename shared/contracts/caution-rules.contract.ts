@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { cautionLevels, cautionRuleIds } from '../domain/cautions/caution-rule.ts'
 import { contract } from './contract.ts'
 import { Instant, LocalDate, Reason, RecordId } from './primitives.ts'
+import { ChosenLicence } from './signing.contract.ts'
 
 const RuleId = z.enum(cautionRuleIds).describe('Number of the rule, for example R01')
 const Level = z.enum(cautionLevels).describe('How grave it is')
@@ -138,6 +139,7 @@ export const confirmRuleParameter = contract({
     'Confirm a proposed threshold; it is in force from then on. Needs a valid licence and the password',
   params: parameterParams.extend({ proposalId: RecordId }),
   body: z.strictObject({
+    licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('Password of the veterinarian, again'),
     reason: Reason,
     jurisdiction: z
@@ -154,6 +156,7 @@ export const confirmRuleParameter = contract({
     'already-confirmed',
     'stale-version',
     'licence-not-valid',
+    'licence-not-chosen',
     'password-wrong',
     'sign-in-locked',
     'may-not',

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { contract } from './contract.ts'
 import { LocalDate, Reason } from './primitives.ts'
 import { caseParams, CaseDetail } from './quarantine.contract.ts'
+import { ChosenLicence } from './signing.contract.ts'
 
 export const clearCase = contract({
   id: 'clearCase',
@@ -11,6 +12,7 @@ export const clearCase = contract({
   summary: 'Clear the batch from quarantine, signed; against unmet conditions only with a reason',
   params: caseParams,
   body: z.strictObject({
+    licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('Password of the signer, again'),
     /** What the signer saw; when it has changed meanwhile nothing is signed. */
     expectedUnmet: z.array(z.string().max(60)).max(60).describe('Codes of the unmet conditions on screen'),
@@ -28,6 +30,7 @@ export const clearCase = contract({
     'stale-version',
     'discrepancy-open',
     'licence-not-valid',
+    'licence-not-chosen',
     'password-wrong',
     'sign-in-locked',
   ],

@@ -5,6 +5,7 @@ import { contract } from './contract.ts'
 import { OrderNumber } from './order-primitives.ts'
 import { EnteredQuantity, Instant, Reason, RecordId } from './primitives.ts'
 import { actAddresses } from './today.addresses.ts'
+import { ChosenLicence } from './signing.contract.ts'
 
 export { BathSheet, RecordedDose, RunningBath } from './bath-sheet.ts'
 
@@ -106,6 +107,7 @@ export const overrideDoseStop = contract({
     'Override a stop for this dose alone: signed with a reason, for the finding and facts that stand now',
   params: doseParams,
   body: z.strictObject({
+    licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('The signer’s password'),
     ruleId: z.string().max(20).describe('Rule that stops'),
     code: z.string().max(80).describe('What it found'),
@@ -118,6 +120,7 @@ export const overrideDoseStop = contract({
     'not-found',
     'may-not',
     'licence-not-valid',
+    'licence-not-chosen',
     'password-wrong',
     'sign-in-locked',
     'broken-record',

@@ -181,6 +181,6 @@ export const confirmDoseLine = contract({
   params: productParams,
   body: z.strictObject({ reason: Reason.optional() }),
   reply: { 200: DoseLine },
-  problems: ['not-found', 'licence-not-valid', 'already-confirmed'],
+  problems: ['not-found', 'licence-not-valid', 'sign-in-locked', 'already-confirmed'],
   idempotent: 'by-key',
 })

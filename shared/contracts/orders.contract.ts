@@ -12,7 +12,7 @@ import {
   SaidLine,
 } from './order-primitives.ts'
 import { Instant, listQuery, May, page, Reason, RecordId, Version } from './primitives.ts'
-import { SignatureBlock } from './signing.contract.ts'
+import { ChosenLicence, SignatureBlock } from './signing.contract.ts'
 import { actAddresses } from './today.addresses.ts'
 
 export const OrderPreview = z.object({
@@ -249,6 +249,7 @@ export const signOrder = contract({
   summary: 'Sign the draft: recomputed, judged again, frozen',
   params: orderParams,
   body: z.strictObject({
+    licenceId: ChosenLicence,
     password: z.string().min(1).max(200).describe('The signer’s password'),
     expectedVersion: Version,
     relationship: z
@@ -268,6 +269,8 @@ export const signOrder = contract({
     'not-found',
     'stale-version',
     'licence-not-valid',
+    'licence-not-chosen',
+    'registration-needed',
     'password-wrong',
     'sign-in-locked',
     'order-incomplete',

@@ -1,5 +1,10 @@
 import { z } from 'zod'
+import { licenceClasses } from '../domain/licences/licence-classes.ts'
+import { licenceStateNames } from '../domain/licences/licence-state.ts'
+import { fileLimitMB } from '../domain/documents/file-limit.ts'
 import { contract } from './contract.ts'
+import { AttachedDocument, UploadFields } from './documents.contract.ts'
+import { LicenceWarning } from './licence-warning.ts'
 import {
   Email,
   Instant,
@@ -16,16 +21,36 @@ import {
 
 const Jurisdiction = z.string().trim().min(1).max(100).describe('Authority that grants the licence')
 const LicenceNumber = z.string().trim().min(1).max(60).describe('Licence number as printed')
+const LicenceClassName = z
+  .enum(licenceClasses, 'Say which of the two it is')
+  .describe('A licence to practise, or a registration to prescribe controlled substances')
 
-export const Licence = z.object({
-  id: RecordId,
+const licenceFields = {
+  class: LicenceClassName,
   jurisdiction: Jurisdiction,
   number: LicenceNumber,
   validFrom: LocalDate.describe('First day of validity'),
   validUntil: LocalDate.describe('Last day of validity'),
-  state: z
-    .enum(['valid', 'not-yet', 'expired', 'void', 'not-accepted-here'])
-    .describe('State today at this facility'),
+}
+
+export const Licence = z.object({
+  id: RecordId,
+  ...licenceFields,
+  lastDay: LocalDate.describe('Last day on which it is valid, earlier than printed where it was ended'),
+  state: z.enum(licenceStateNames).describe('State today at this facility'),
+  warning: LicenceWarning.nullable().describe('That it ends soon or has ended with none in its place'),
+  ended: z
+    .object({
+      on: LocalDate.describe('Last day on which it was valid'),
+      reason: z.string().describe('Why'),
+      by: z.string().describe('Who entered that'),
+      at: Instant.describe('When that was entered'),
+    })
+    .nullable()
+    .describe('That it was ended before its time'),
+  supersedesId: RecordId.nullable().describe('The entry that this one corrects'),
+  reason: z.string().nullable().describe('Why it was corrected, of one that corrects another'),
+  documents: z.array(AttachedDocument).describe('Its papers, in the order in which they were attached'),
   voidedReason: z.string().nullable().describe('Why it was voided, where it was'),
   recordedAt: Instant.describe('When it was entered'),
   recordedBy: z.string().describe('Who entered it'),
@@ -40,7 +65,18 @@ export const PersonRow = z.object({
   active: z.boolean().describe('May sign in'),
   mustChangePassword: z.boolean().describe('Still has a one-time password'),
   licenceState: z.enum(['valid', 'not-valid', 'none']).describe('Whether a licence is valid today here'),
+  licenceNotice: LicenceWarning.extend({
+    class: LicenceClassName,
+    number: LicenceNumber,
+    jurisdiction: Jurisdiction,
+    lastDay: LocalDate.describe('Last day on which it is valid'),
+  })
+    .nullable()
+    .describe('The licence or registration whose end presses most; null where none ends soon'),
   lastSignInAt: Instant.nullable().describe('Last sign-in'),
+  signingLockedUntil: Instant.nullable().describe(
+    'Until when signing is locked after wrong passwords in a row; null when it is not',
+  ),
   version: z.int().describe('Version for saving'),
 })
 export type PersonRow = z.infer<typeof PersonRow>
@@ -138,18 +174,76 @@ export const enterLicence = contract({
   method: 'post',
   path: '/people/:id/licences',
   action: 'people.manage',
-  summary: 'Enter a licence to practise',
+  summary: 'Enter a licence to practise or a controlled-substance registration',
   params: personParams,
-  body: z.strictObject({
-    id: RecordId,
-    jurisdiction: Jurisdiction,
-    number: LicenceNumber,
-    validFrom: LocalDate.describe('First day of validity'),
-    validUntil: LocalDate.describe('Last day of validity'),
-  }),
+  body: z.strictObject({ id: RecordId, ...licenceFields }),
   reply: { 201: Person },
   problems: ['not-found', 'id-already-used', 'period-reversed'],
   idempotent: 'by-record-id',
+})
+
+const licenceParams = personParams.extend({ licenceId: RecordId })
+
+export const correctLicence = contract({
+  id: 'correctLicence',
+  method: 'post',
+  path: '/people/:id/licences/:licenceId/correction',
+  action: 'people.manage',
+  summary: 'Correct a licence: another entry stands in its place, and the earlier one stays readable',
+  params: licenceParams,
+  body: z.strictObject({ id: RecordId, ...licenceFields, reason: Reason }),
+  reply: { 201: Person },
+  problems: ['not-found', 'id-already-used', 'period-reversed', 'licence-changed'],
+  idempotent: 'by-record-id',
+})
+
+export const endLicence = contract({
+  id: 'endLicence',
+  method: 'post',
+  path: '/people/:id/licences/:licenceId/end',
+  action: 'people.manage',
+  summary: 'End a licence before its time, with its last day and the reason',
+  params: licenceParams,
+  body: z.strictObject({
+    endedOn: LocalDate.describe('Last day on which it is valid, inside its period'),
+    reason: Reason,
+  }),
+  reply: { 200: Person },
+  problems: ['not-found', 'bad-input', 'licence-changed'],
+  idempotent: 'by-key',
+})
+
+export const attachLicenceDocument = contract({
+  id: 'attachLicenceDocument',
+  method: 'post',
+  path: '/people/:id/licences/:licenceId/documents',
+  action: 'people.manage',
+  summary: `Attach a paper to a licence: one file of at most ${String(fileLimitMB)} MB with its fields beside it`,
+  params: licenceParams,
+  body: UploadFields,
+  reply: { 201: AttachedDocument },
+  problems: [
+    'not-found',
+    'may-not',
+    'file-missing',
+    'file-too-large',
+    'file-type-not-allowed',
+    'id-already-used',
+  ],
+  idempotent: 'by-record-id',
+  consumes: 'multipart',
+})
+
+export const getOwnLicences = contract({
+  id: 'getOwnLicences',
+  method: 'get',
+  path: '/me/licences',
+  action: 'profile.manage',
+  summary: 'One’s own licences with their papers, every one ever entered',
+  reply: {
+    200: z.object({ licences: z.array(Licence).describe('Every licence ever entered, the newest first') }),
+  },
+  problems: [],
 })
 
 export const voidLicence = contract({
@@ -158,9 +252,9 @@ export const voidLicence = contract({
   path: '/people/:id/licences/:licenceId/void',
   action: 'people.manage',
   summary: 'Void a licence that was entered wrongly or has been withdrawn; it stays readable',
-  params: personParams.extend({ licenceId: RecordId }),
+  params: licenceParams,
   body: z.strictObject({ reason: Reason }),
   reply: { 200: Person },
-  problems: ['not-found'],
+  problems: ['not-found', 'licence-changed'],
   idempotent: 'by-key',
 })

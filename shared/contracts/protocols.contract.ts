@@ -146,6 +146,6 @@ export const confirmProtocol = contract({
   }),
   body: z.strictObject({ reason: Reason.optional() }),
   reply: { 200: ProtocolVersion },
-  problems: ['not-found', 'already-confirmed', 'licence-not-valid'],
+  problems: ['not-found', 'already-confirmed', 'licence-not-valid', 'sign-in-locked'],
   idempotent: 'by-key',
 })

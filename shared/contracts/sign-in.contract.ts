@@ -1,14 +1,22 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
-import { Email, LocalDate, PersonName, RecordId, RoleName } from './primitives.ts'
+import { licenceClasses } from '../domain/licences/licence-classes.ts'
+import { licenceStateNames } from '../domain/licences/licence-state.ts'
+import { LicenceWarning } from './licence-warning.ts'
+import { Email, Instant, LocalDate, PersonName, RecordId, RoleName } from './primitives.ts'
 import { signInAddresses } from './sign-in.addresses.ts'
 
 /** A licence to practise, as far as every screen needs it. */
 export const LicenceBrief = z.object({
+  id: RecordId,
+  class: z.enum(licenceClasses).describe('A licence to practise, or a controlled-substance registration'),
   jurisdiction: z.string().describe('Who granted it'),
   number: z.string().describe('Licence number as printed'),
   validFrom: LocalDate,
   validUntil: LocalDate.describe('Last day of validity'),
+  lastDay: LocalDate.describe('Last day on which it is valid, earlier than printed where it was ended'),
+  state: z.enum(licenceStateNames).describe('State today at this facility'),
+  warning: LicenceWarning.nullable().describe('That it ends soon or has ended with none in its place'),
   validToday: z.boolean().describe('Valid today in a jurisdiction this facility accepts'),
 })
 
@@ -19,8 +27,11 @@ export const Me = z.object({
   printedName: PersonName,
   roles: z.array(RoleName).describe('Roles held now'),
   mustChangePassword: z.boolean().describe('A one-time password has to be changed before anything else'),
-  licences: z.array(LicenceBrief).describe('Licences of this person that are not void'),
+  licences: z.array(LicenceBrief).describe('Licences of this person that are neither void nor corrected'),
   mayPractise: z.boolean().describe('Holds a licence valid today that this facility accepts'),
+  signingLockedUntil: Instant.nullable().describe(
+    'Until when signing is locked after wrong passwords in a row; null when it is not',
+  ),
   preferences: z.record(z.string(), z.string()).describe('Choices of this person, such as units'),
   facility: z
     .object({

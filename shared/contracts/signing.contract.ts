@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { contract } from './contract.ts'
 import { entriesBeside } from '../domain/orders/entries-beside.ts'
-import { Instant, LocalDate } from './primitives.ts'
+import { Instant, LocalDate, RecordId } from './primitives.ts'
 
 /** What a check found wrong with a signed record. */
 export const RecordFault = z.object({
@@ -14,18 +14,27 @@ export const RecordFault = z.object({
 })
 export type RecordFault = z.infer<typeof RecordFault>
 
+const SignedLicence = z.object({
+  jurisdiction: z.string().describe('Who granted the licence'),
+  number: z.string().describe('Licence number'),
+  validUntil: LocalDate.describe('Last day of validity, as known at signing'),
+})
+
+/** The licence a signer chooses where several are valid. */
+export const ChosenLicence = RecordId.optional().describe(
+  'The licence the signer signs under; needed where several are valid today',
+)
+
 /** The block that stands under everything that was signed, on screen and on paper. */
 export const SignatureBlock = z.object({
   printedName: z.string().describe('Name of the signer as printed'),
   role: z.string().describe('In which role it was signed'),
-  licence: z
-    .object({
-      jurisdiction: z.string().describe('Who granted the licence'),
-      number: z.string().describe('Licence number'),
-      validUntil: LocalDate.describe('Last day of validity, as known at signing'),
-    })
-    .nullable()
-    .describe('The licence valid on the day of signing; null where the text cannot be read any more'),
+  licence: SignedLicence.nullable().describe(
+    'The licence valid on the day of signing; null where the text cannot be read any more',
+  ),
+  registration: SignedLicence.nullable().describe(
+    'The controlled-substance registration it was signed under; null where none was asked for',
+  ),
   meaning: z.string().describe('What the signature means, for example author of this order'),
   signedAt: Instant,
   signedOn: LocalDate.describe('Facility date of signing'),

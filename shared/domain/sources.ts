@@ -14,6 +14,12 @@ export interface Source {
 export const sources = {
   'project-default': { citation: 'Project default, to be confirmed by the facility', mark: 'P' },
 
+  'us-controlled-schedules': {
+    citation:
+      'United States schedules of controlled substances: butorphanol in schedule IV, ketamine in schedule III',
+    mark: 'M',
+  },
+
   'nist-sp-811': {
     citation:
       'NIST Special Publication 811 and Handbook 44 appendix C: inch, pound and US gallon by exact definition; ' +

@@ -11,6 +11,8 @@ export const documentWords = defineMessages({
   signedAs: ({ meaning }: { meaning: string }) => `Signed as ${meaning}`,
   signedBy: ({ name, at }: { name: string; at: string }) => `Signed by ${name}, ${at}`,
   signerRole: 'veterinarian',
+  registration: ({ number, until }: { number: string; until: string }) =>
+    `controlled-substance registration ${number}, valid to ${until}`,
   licence: ({ number, until }: { number: string; until: string }) => `licence ${number}, valid to ${until}`,
   fingerprintInFull: 'Record check in full',
   scanToCheck: 'Is this paper still current?',

@@ -122,16 +122,11 @@ export const orderFormWords = defineMessages({
       .join(', ') || 'no caution',
 
   sign: 'Sign as author of this order',
-  signWho: (p: { name: string; jurisdiction: string; number: string; until: string }) =>
-    `${p.name}, ${p.jurisdiction}, licence ${p.number}, valid to ${p.until}.`,
   signMeaning:
     'Your name, licence, the time and “author of this order” will stand on it. It can’t be changed after.',
   password: 'Your password',
   signAct: 'Sign order',
   signing: 'Signing',
-  licenceEnded: (p: { number: string; until: string }) =>
-    `Licence ${p.number} ended on ${p.until}. With it nothing can be signed, confirmed or overridden.`,
-  noLicence: 'No licence is recorded for you that is valid today here.',
   passwordNeeded: 'Type your password.',
   missingHeading: 'Before it can be signed',
   waitForJudgement: 'Wait until the order is worked out.',

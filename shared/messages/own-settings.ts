@@ -16,11 +16,8 @@ export const ownSettingsWords = defineMessages({
   keysLabel: 'L, N, g, / and ? act as keys when nobody is typing',
   keysHint: 'Ctrl K always finds.',
   facilityUnit: 'As the facility',
-  licences: 'Licences',
+  licences: 'Licences and registrations',
   noLicence: 'No licence is entered for you.',
-  licenceLine: (p: { number: string; jurisdiction: string; until: string }) =>
-    `${p.number}, ${p.jurisdiction}, valid until ${p.until}`,
-  licenceValid: 'Valid today',
-  licenceNotValid: 'Not valid today',
+  licencesHint: 'An administrator enters, corrects and ends them.',
   kept: 'Kept',
 })

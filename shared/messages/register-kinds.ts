@@ -118,6 +118,7 @@ export const permitMarkNames = defineMessages({
 
 export const documentKindNames = defineMessages({
   permit: 'Permit',
+  licence: 'Licence or registration',
   'health-certificate': 'Health certificate',
   invoice: 'Invoice',
   'loan-agreement': 'Loan agreement',

@@ -1,3 +1,5 @@
+import type { LicenceClass } from '../domain/licences/licence-classes.ts'
+import { sayLicenceNotice } from './signing.ts'
 import type { TodayLogLine, TodayWork } from '../contracts/today.contract.ts'
 import type { AgentCode } from '../domain/formulary/agent.ts'
 import type { DiscrepancyKind } from '../domain/animals/discrepancy.ts'
@@ -37,8 +39,7 @@ const byAndWhen = (t: Told) => beside(t.text('by'), t.at)
 /** What there is to do, in a few words that name the place. */
 const titles = defineMessages({
   'urgent-call': (t: Told) => `Urgent at ${t.text('enclosure')}`,
-  'own-licence': (t: Told) =>
-    t.has('until') ? `Your licence ends on ${sayDate(t.text('until'))}` : 'You have no valid licence',
+  'own-licence': (t: Told) => (t.has('until') ? `Your ${asOwn(sayEnd(t))}` : 'You have no valid licence'),
   'observation-flagged': (t: Told) => `Read what was seen at ${t.text('enclosure')}`,
   'order-held': (t: Told) => beside(`${t.text('number')} is held`, t.text('enclosure'), t.drug),
   'case-held': (t: Told) => `${caseWords(t)} is ${t.number('held') === 1 ? 'held' : 'locked'}`,
@@ -79,15 +80,30 @@ const titles = defineMessages({
   'permit-marks': (t: Told) => `${t.text('number')} ${t.text('permit')} was overdrawn`,
   'permit-runs-out': (t: Told) =>
     `${t.text('number')} ${t.text('permit')} ends in ${counted(t.number('days'), 'day', 'days')}`,
-  'account-without-licence': (t: Told) =>
-    t.has('until')
-      ? `Licence of ${t.text('name')} ends on ${sayDate(t.text('until'))}`
-      : `${t.text('name')} has no valid licence`,
+  'account-without-licence': (t: Told) => `${t.text('name')} has no valid licence`,
+  'licence-ends': (t: Told) => `${t.text('name')}: ${sayEnd(t)}`,
+  'signing-locked': (t: Told) =>
+    !t.has('until') || !t.has('since')
+      ? `Signing of ${t.text('name')} was locked`
+      : t.has('running')
+        ? `Signing of ${t.text('name')} is locked until ${t.moment(t.text('until'))}`
+        : `Signing of ${t.text('name')} was locked, ${t.moment(t.text('since'))} to ${t.moment(t.text('until'))}`,
   'account-without-sign-in': (t: Told) => `${t.text('name')} has never signed in`,
   'setting-proposed': (t: Told) => `Confirm: ${settingNames[t.text('key') as SettingKey]}`,
   'settings-default': (t: Told) =>
     `${counted(t.number('count'), 'setting', 'settings')} nobody has confirmed`,
 } satisfies Record<TodayKind, Say>)
+
+function sayEnd(t: Told): string {
+  return sayLicenceNotice({
+    class: t.text('class') as LicenceClass,
+    number: t.text('number'),
+    jurisdiction: t.text('jurisdiction'),
+    daysLeft: t.number('days'),
+    lastDay: t.text('until'),
+  })
+}
+const asOwn = (sentence: string) => sentence.charAt(0).toLowerCase() + sentence.slice(1)
 
 const lastLook = (t: Told) =>
   t.has('lastAt') ? `last ${t.moment(t.text('lastAt'))}, ${t.text('lastBy')}` : 'not looked at yet'
@@ -97,7 +113,9 @@ const notes = defineMessages({
   'urgent-call': (t: Told) => t.text('words'),
   'own-licence': (t: Told) =>
     t.has('until')
-      ? 'After that day another veterinarian signs.'
+      ? t.text('class') === 'veterinary'
+        ? 'After its last day another veterinarian signs. You may still hold and stop.'
+        : 'Without it you sign no order for a controlled drug. You may still hold and stop.'
       : 'Another veterinarian signs, confirms and overrides. You may still hold and stop.',
   'observation-flagged': (t: Told) =>
     beside(
@@ -158,6 +176,12 @@ const notes = defineMessages({
   'permit-marks': (t: Told) => t.text('authority'),
   'permit-runs-out': (t: Told) => t.text('authority'),
   'account-without-licence': () => 'Veterinarian. Cannot sign, confirm or override without one.',
+  'licence-ends': (t: Told) =>
+    t.text('class') === 'veterinary'
+      ? 'Enter the renewed one, with its paper, or end it.'
+      : 'Without it no order for a controlled drug is signed. Enter the renewed one, or end it.',
+  'signing-locked': (t: Told) =>
+    `${counted(t.number('count'), 'wrong password', 'wrong passwords')} in a row. They may still hold and stop. Ask whether it was them.`,
   'account-without-sign-in': () => 'Give a one-time password, or close the account.',
   'setting-proposed': (t: Told) => byAndWhen(t),
   'settings-default': () => 'They stand as this program set them.',

@@ -10,6 +10,9 @@ export const settingNames = defineMessages({
   'facility.paper': 'Paper',
   'facility.gallon': 'What “gal” means when no kind is stated',
   'numbers.accession': 'Form of accession numbers',
+  'licences.warn-first-days': 'First warning before a licence ends, in days',
+  'licences.warn-second-days': 'Second warning before a licence ends, in days',
+  'licences.warn-last-days': 'Last warning before a licence ends, in days',
   'notices.on-call': 'Whom to call when something is urgent',
 } satisfies Record<SettingKey, string>)
 
@@ -22,6 +25,10 @@ export const settingHints = defineMessages({
   'facility.paper': 'A4 or Letter, for every printed document.',
   'facility.gallon': 'Refused asks each time which gallon is meant.',
   'numbers.accession': 'Zeros in braces are the running number, for example HP-{0000}.',
+  'licences.warn-first-days':
+    'On Today of the person and of the administrator, in the profile and beside the signature. 1 to 365 days.',
+  'licences.warn-second-days': 'Said again, nearer to the end. 1 to 365 days.',
+  'licences.warn-last-days': 'The last of the three. 1 to 365 days.',
   'notices.on-call':
     'Name, telephone and e-mail, with bars between them and a comma after each: Dr A. Name | 555 0100 | name@example.org. In the order in which to call.',
 } satisfies Record<SettingKey, string>)

@@ -113,6 +113,8 @@ export const goWords = defineMessages({
   'permit-marks': '',
   'permit-runs-out': '',
   'account-without-licence': '',
+  'licence-ends': '',
+  'signing-locked': '',
   'account-without-sign-in': '',
   'setting-proposed': 'Read and confirm',
   'settings-default': '',

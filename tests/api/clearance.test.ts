@@ -27,7 +27,7 @@ afterAll(async () => {
 
 // The fixed day of the tests is 2026-12-01 in Halifax, where days begin at 04:00 UTC.
 
-const licenceOf = { jurisdiction: 'Norrell Sound', validFrom: '2026-01-01' }
+const licenceOf = { class: 'veterinary' as const, jurisdiction: 'Norrell Sound', validFrom: '2026-01-01' }
 const background = {
   actor: { personId: null, printedName: 'Installation', roles: [] },
   requestId: 'test',

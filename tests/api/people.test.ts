@@ -205,6 +205,7 @@ describe('settings of the facility', () => {
 describe('licences', () => {
   const licence = (validFrom: string, validUntil: string) => ({
     id: api.nextId(),
+    class: 'veterinary',
     jurisdiction: 'Norrell Sound',
     number: 'VL-1',
     validFrom,

@@ -328,15 +328,8 @@ describe('sign-in', () => {
 
   it('counts wrong passwords of somebody signed in towards one lock, in whatever form', async () => {
     const { id, agent } = await api.as('veterinarian')
-    const { signing, people, parts } = api.composition
+    const { signing, parts } = api.composition
     const actor = { personId: id, printedName: 'Vet', roles: ['veterinarian' as const] }
-    await people.service.enterLicence({ actor, requestId: 'test' }, id, {
-      id: api.nextId(),
-      jurisdiction: 'Norrell Sound',
-      number: 'VL-77',
-      validFrom: '2026-01-01',
-      validUntil: '2026-12-31',
-    })
     const change = (currentPassword: string) =>
       agent.post('/api/me/password').send({ currentPassword, newPassword: 'another one, longer' })
     const sign = (typed: string) =>

@@ -89,6 +89,7 @@ describe('signing', () => {
     const { people, parts, signing } = api.composition
     await people.service.enterLicence(contextOf(vet, 'veterinarian'), vet.id, {
       id: api.nextId(),
+      class: 'veterinary',
       jurisdiction: 'norrell sound',
       number: 'VL-2',
       validFrom: '2026-01-01',
@@ -111,6 +112,7 @@ describe('signing', () => {
     const { people, parts, signing } = api.composition
     await people.service.enterLicence(contextOf(vet, 'veterinarian'), vet.id, {
       id: api.nextId(),
+      class: 'veterinary',
       jurisdiction: 'Norrell Sound',
       number: 'VL-3',
       validFrom: '2020-01-01',

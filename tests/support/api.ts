@@ -110,6 +110,7 @@ export async function startApi(given: ApiOptions = {}): Promise<TestApi> {
     if (role === 'veterinarian')
       await people.service.enterLicence(background, made.id, {
         id: nextId(),
+        class: 'veterinary',
         jurisdiction: 'Norrell Sound',
         number: 'VL-20417',
         validFrom: '2024-01-01',

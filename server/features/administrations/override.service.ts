@@ -29,7 +29,10 @@ export function createOverrides(parts: AdministrationsParts) {
       given: BodyOf<typeof overrideDoseStop>,
     ): Promise<void> {
       const now = parts.clock.now()
-      const signatory = await parts.signing.confirmSignatory(context, 'caution.override', given.password, now)
+      const { password, licenceId } = given
+      const signatory = await parts.signing.confirmSignatory(context, 'caution.override', password, now, {
+        licenceId,
+      })
       await parts.transactions.inTransaction(context, async (tx) => {
         const situation = await lockAndRead(parts, tx, { number, key, at: tx.at, lotId: given.lotId })
         refuseBroken(situation)

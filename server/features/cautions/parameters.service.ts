@@ -139,8 +139,8 @@ export function createParameters(parts: ParametersParts) {
     },
 
     /**
-     * @refuses licence-not-valid | password-wrong | sign-in-locked | not-found | already-confirmed | stale-version |
-     * bad-input where a limit is broken or a jurisdiction is missing
+     * @refuses licence-not-valid | licence-not-chosen | password-wrong | sign-in-locked | not-found | already-confirmed |
+     * stale-version | bad-input where a limit is broken or a jurisdiction is missing
      */
     async confirm(
       context: RequestContext,
@@ -155,6 +155,7 @@ export function createParameters(parts: ParametersParts) {
         'formulary.confirm',
         given.password,
         now,
+        { licenceId: given.licenceId },
       )
       await parts.transactions.inTransaction(context, async (tx) => {
         await lockParameter(tx, name)

@@ -5,6 +5,7 @@ import type { FileOnRecord } from '../../platform/files/serve-kept.ts'
 
 export interface DocumentReadRow {
   id: string
+  parent_kind: string
   parent_id: string
   read_action: Action
   title: string
@@ -21,7 +22,7 @@ export interface DocumentReadRow {
 }
 
 const columns = `
-  d.id, d.parent_id, d.read_action, d.title, d.kind, d.file_name, d.media_type, d.bytes, d.sha256, d.recorded_at,
+  d.id, d.parent_kind, d.parent_id, d.read_action, d.title, d.kind, d.file_name, d.media_type, d.bytes, d.sha256, d.recorded_at,
   p.printed_name AS recorded_by_name, v.reason AS voided_reason, v.recorded_at AS voided_at,
   w.printed_name AS voided_by_name`
 const joins = `

@@ -12,6 +12,7 @@ import { readDocument, readDocumentsOf, readFilesOnRecord, readPrints } from './
 import { documentRoutes } from './documents.routes.ts'
 import type { DocumentQueries } from './documents.routes.ts'
 import { createDocumentsService } from './documents.service.ts'
+import { createOwnReaders } from './own-readers.ts'
 import { createPrintStates } from './print-states.ts'
 
 export { receiveUpload } from './documents.routes.ts'
@@ -25,6 +26,7 @@ export function createDocuments(parts: Parts & { files: FileStore }) {
   const serve = createFileServer(parts)
   const service = createDocumentsService(parts)
   const prints = createPrintStates()
+  const readers = createOwnReaders()
   const queries: DocumentQueries = {
     async document(id) {
       const row = await readDocument(dataSource, id)
@@ -34,7 +36,10 @@ export function createDocuments(parts: Parts & { files: FileStore }) {
     async file(context, id) {
       const row = await readDocument(dataSource, id)
       if (!row) throw new Problem('not-found')
-      if (!decide(row.read_action, context.actor.roles, {}).allowed)
+      const mayRead =
+        decide(row.read_action, context.actor.roles, {}).allowed ||
+        (await readers.mayRead(row.parent_kind, row.parent_id, context.actor))
+      if (!mayRead)
         throw new Problem('may-not', {
           detail: permissionWords.whoMay({ roles: rolesThatMay(row.read_action) }),
         })
@@ -68,6 +73,7 @@ export function createDocuments(parts: Parts & { files: FileStore }) {
   return {
     service,
     prints,
+    readers,
     /** One paper on file. */
     documentOf: queries.document,
     /** Every paper on file, also a struck one, for comparing the disk with the records. */

@@ -22,6 +22,8 @@ export interface FormularyParts {
   ids: Ids
   facility: FacilityService
   validLicence(personId: string, at: Date): Promise<ValidLicence | null>
+  /** @refuses sign-in-locked */
+  refuseWhileLocked(personId: string): Promise<void>
 }
 
 const productSubject = (row: { id: string; productName: string }) => ({
@@ -199,6 +201,7 @@ export function createFormularyService(parts: FormularyParts) {
       const personId = context.actor.personId
       if (personId === null) throw new Problem('not-signed-in')
       if (!(await parts.validLicence(personId, parts.clock.now()))) throw new Problem('licence-not-valid')
+      await parts.refuseWhileLocked(personId)
       await parts.transactions.inTransaction(context, async (tx) => {
         const line = await repository.findDoseLine(tx, id)
         if (!line) throw new Problem('not-found')

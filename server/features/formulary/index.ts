@@ -17,6 +17,7 @@ export function createFormulary(parts: Parts & { facility: FacilityService; peop
   const service = createFormularyService({
     ...parts,
     validLicence: (personId, at) => parts.people.questions.validLicence(personId, at),
+    refuseWhileLocked: parts.people.ownPassword.refuseWhileLocked,
   })
   const today = () => facility.dateOf(clock.now())
   const queries: FormularyQueries = {

@@ -1,6 +1,7 @@
 import type { AnsweredCaution } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
+import { scheduleOf } from '../../../shared/domain/licences/controlled-agents.ts'
 import { orderProblemWords, orderWords, relationshipWords } from '../../../shared/messages/orders.ts'
 import { verifyWorking } from '../../platform/arithmetic/verify-working.ts'
 import type { Clock } from '../../platform/clock.ts'
@@ -13,6 +14,7 @@ import type { Ids } from '../../platform/ids.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { SigningService } from '../signing/index.ts'
 import { checkAnswers } from './check-answers.ts'
+import { scheduleOfDraft } from './draft-schedule.ts'
 import { keptBench, saidBench } from './order-bench.ts'
 import type { AskBench } from './order-bench.ts'
 import { contentOf } from './order-content.ts'
@@ -45,6 +47,7 @@ export interface OrdersParts extends SituationParts {
 }
 
 export interface SignRequest {
+  licenceId?: string | undefined
   password: string
   expectedVersion: number
   read: AnsweredCaution[]
@@ -193,11 +196,13 @@ export function createOrdersService(parts: OrdersParts) {
       number: string,
       request: SignRequest,
     ): Promise<{ versionNo: number }> {
+      const controlledSchedule = await scheduleOfDraft(parts, number)
       const signatory = await parts.signing.confirmSignatory(
         context,
         'order.sign',
         request.password,
         parts.clock.now(),
+        { licenceId: request.licenceId, controlledSchedule },
       )
       return parts.transactions.inTransaction(context, async (tx) => {
         const order = await lock(tx, number)
@@ -217,6 +222,8 @@ export function createOrdersService(parts: OrdersParts) {
         const bench = await saidBench(parts.askBench, fields, found.judgement?.dose ?? null)
         checkAnswers(saidCautions(found), request)
         const { judgement, product, situation } = found
+        // the drug was exchanged between the look at the registration and now
+        if (product && scheduleOf(product.agent) !== controlledSchedule) throw new Problem('stale-version')
         const isExtralabel = fields.use === 'extralabel'
         if (isExtralabel && request.relationship !== true)
           throw refusedInput('/relationship', relationshipWords.needed, 'relationship-not-stated')

@@ -2,7 +2,7 @@ import type { Role } from '../../../shared/domain/permissions/roles.ts'
 import { insertOnce, updateVersioned } from '../../platform/database/rows.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import { noteChange } from '../../platform/database/written-rows.ts'
-import { LicenceRecord, LicenceVoid, Person, PersonRole } from './person.entity.ts'
+import { LicenceEnd, LicenceRecord, LicenceVoid, Person, PersonRole } from './person.entity.ts'
 
 export function insertPerson(tx: Tx, row: Person): Promise<{ created: boolean }> {
   return insertOnce(tx, Person, row, ['email', 'printedName'])
@@ -78,7 +78,28 @@ export async function countOtherAdministrators(tx: Tx, personId: string): Promis
 }
 
 export function insertLicence(tx: Tx, row: LicenceRecord): Promise<{ created: boolean }> {
-  return insertOnce(tx, LicenceRecord, row, ['personId', 'jurisdiction', 'number', 'validFrom', 'validUntil'])
+  return insertOnce(tx, LicenceRecord, row, [
+    'personId',
+    'class',
+    'jurisdiction',
+    'number',
+    'validFrom',
+    'validUntil',
+    'supersedesId',
+    'reason',
+  ])
+}
+
+export async function isSuperseded(tx: Tx, licenceId: string): Promise<boolean> {
+  return tx.manager.existsBy(LicenceRecord, { supersedesId: licenceId })
+}
+
+export async function isEnded(tx: Tx, licenceId: string): Promise<boolean> {
+  return tx.manager.existsBy(LicenceEnd, { licenceId })
+}
+
+export async function insertLicenceEnd(tx: Tx, row: LicenceEnd): Promise<void> {
+  await tx.manager.insert(LicenceEnd, row)
 }
 
 export function findLicence(tx: Tx, id: string): Promise<LicenceRecord | null> {

@@ -3,8 +3,10 @@ import type { Ids } from '../../platform/ids.ts'
 import type { Transactions, Tx } from '../../platform/database/transactions.ts'
 import { Problem } from '../../platform/http/problem.ts'
 import type { RequestContext } from '../../platform/http/request-context.ts'
+import { personSubject as subject } from './person-subject.ts'
 import type { OwnPassword } from '../../platform/sign-in/own-password.ts'
 import { hashPassword, makeOneTimePassword } from '../../platform/sign-in/passwords.ts'
+import { createLicencesService } from './licences.service.ts'
 import * as repository from './people.repository.ts'
 
 export interface PeopleParts {
@@ -13,13 +15,9 @@ export interface PeopleParts {
   ownPassword: OwnPassword
 }
 
-const subject = (person: { id: string; printedName: string }) => ({
-  kind: 'person',
-  id: person.id,
-  label: person.printedName,
-})
-
 export function createPeopleService(parts: PeopleParts) {
+  const licences = createLicencesService(parts)
+
   async function setRoles(tx: Tx, personId: string, wanted: readonly Role[]): Promise<Role[]> {
     const held = await repository.rolesHeld(tx, personId)
     for (const role of held.filter((role) => !wanted.includes(role)))
@@ -38,6 +36,8 @@ export function createPeopleService(parts: PeopleParts) {
   }
 
   return {
+    ...licences,
+
     /**
      * Enters a person with a one-time password, or with a given one for the first administrator and the demo.
      * @returns the one-time password, shown once; null when the same person was entered before
@@ -141,7 +141,7 @@ export function createPeopleService(parts: PeopleParts) {
     ): Promise<void> {
       const id = context.actor.personId
       if (id === null) throw new Problem('not-signed-in')
-      await parts.ownPassword.confirm(id, given.currentPassword, {
+      await parts.ownPassword.confirm(context, given.currentPassword, {
         pointer: '/currentPassword',
         detail: 'Nothing was changed. Type the password that you used until now.',
       })
@@ -185,58 +185,6 @@ export function createPeopleService(parts: PeopleParts) {
       await parts.transactions.inTransaction(context, async (tx) => {
         await repository.noteSignIn(tx, personId)
         tx.audit({ action: 'person.sign-in', subject: { kind: 'person', id: personId, label: printedName } })
-      })
-    },
-
-    async enterLicence(
-      context: RequestContext,
-      personId: string,
-      given: { id: string; jurisdiction: string; number: string; validFrom: string; validUntil: string },
-    ): Promise<void> {
-      if (given.validUntil < given.validFrom)
-        throw new Problem('period-reversed', {
-          errors: [{ pointer: '/validUntil', detail: 'The last day has to be on or after the first day.' }],
-        })
-      await parts.transactions.inTransaction(context, async (tx) => {
-        const person = await repository.lockPerson(tx, personId)
-        if (!person) throw new Problem('not-found')
-        const row = { ...given, personId, recordedAt: tx.at, recordedBy: tx.actor.personId }
-        const { created } = await repository.insertLicence(tx, row)
-        if (!created) return
-        const { jurisdiction, number, validFrom, validUntil } = given
-        tx.audit({
-          action: 'licence.enter',
-          subject: subject(person),
-          after: { jurisdiction, number, validFrom, validUntil },
-        })
-      })
-    },
-
-    /** Voids a licence with a reason; voiding it a second time changes nothing. */
-    async voidLicence(
-      context: RequestContext,
-      personId: string,
-      licenceId: string,
-      reason: string,
-    ): Promise<void> {
-      await parts.transactions.inTransaction(context, async (tx) => {
-        const person = await repository.lockPerson(tx, personId)
-        const licence = await repository.findLicence(tx, licenceId)
-        if (!person || licence?.personId !== personId) throw new Problem('not-found')
-        if (await repository.isVoid(tx, licenceId)) return
-        await repository.insertLicenceVoid(tx, {
-          id: parts.ids.next(),
-          licenceId,
-          reason,
-          recordedAt: tx.at,
-          recordedBy: tx.actor.personId,
-        })
-        tx.audit({
-          action: 'licence.void',
-          subject: subject(person),
-          before: { jurisdiction: licence.jurisdiction, number: licence.number },
-          after: { reason },
-        })
       })
     },
   }

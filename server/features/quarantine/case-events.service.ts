@@ -231,7 +231,10 @@ export function createCaseEventsService(
       given: Body<typeof contracts.signDeathCause>,
       now: Date,
     ): Promise<void> {
-      const signatory = await parts.signing.confirmSignatory(context, 'necropsy.sign', given.password, now)
+      const { password, licenceId } = given
+      const signatory = await parts.signing.confirmSignatory(context, 'necropsy.sign', password, now, {
+        licenceId,
+      })
       await parts.transactions.inTransaction(context, async (tx) => {
         const locked = await writer.lock(tx, number)
         const { head, facts } = locked

@@ -76,7 +76,10 @@ export function createClearanceService(
      * not-clearable | discrepancy-open | reason-needed
      */
     async clear(context: RequestContext, number: string, given: Given, now: Date): Promise<void> {
-      const signatory = await parts.signing.confirmSignatory(context, 'case.clear', given.password, now)
+      const { password, licenceId } = given
+      const signatory = await parts.signing.confirmSignatory(context, 'case.clear', password, now, {
+        licenceId,
+      })
       await parts.transactions.inTransaction(context, async (tx) => {
         const locked = await writer.lock(tx, number)
         const { facts, head } = locked

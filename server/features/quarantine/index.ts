@@ -77,7 +77,8 @@ export function createQuarantine(
     publicUrl: string
   },
 ) {
-  const parts = { ...given, people: given.people.questions, water: given.water.questions }
+  const { refuseWhileLocked } = given.people.ownPassword
+  const parts = { ...given, refuseWhileLocked, people: given.people.questions, water: given.water.questions }
   const writer = createCaseWriter(parts)
   const unnamed = createUnnamedBodies({ ...parts, writer })
   given.animals.follow(unnamed)

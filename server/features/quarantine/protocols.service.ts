@@ -24,6 +24,8 @@ export function createProtocolsService(parts: {
   clock: Clock
   ids: Ids
   people: PeopleQuestions
+  /** @refuses sign-in-locked */
+  refuseWhileLocked(personId: string): Promise<void>
 }) {
   return {
     async propose(context: RequestContext, given: Proposed): Promise<void> {
@@ -81,6 +83,7 @@ export function createProtocolsService(parts: {
       const licence = personId === null ? null : await parts.people.validLicence(personId, parts.clock.now())
       const decision = decide('formulary.confirm', context.actor.roles, { 'valid-licence': licence !== null })
       if (!decision.allowed || personId === null) throw new Problem('licence-not-valid')
+      await parts.refuseWhileLocked(personId)
       await parts.transactions.inTransaction(context, async (tx) => {
         await repository.insertConfirmation(tx, {
           id: parts.ids.next(),

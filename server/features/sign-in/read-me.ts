@@ -16,8 +16,8 @@ export function createMeReader(parts: {
 }): MeReader {
   return async (signedIn) => {
     const { people, facility } = parts
-    const person = await people.queries.person(signedIn.personId)
-    const licences = person.licences.filter((licence) => licence.state !== 'void')
+    const person = await people.personAsSignedIn(signedIn.personId)
+    const licences = person.licences.filter(({ state }) => state !== 'void' && state !== 'superseded')
     return {
       id: person.id,
       email: person.email,
@@ -25,13 +25,19 @@ export function createMeReader(parts: {
       roles: person.roles,
       mustChangePassword: signedIn.mustChangePassword,
       licences: licences.map((licence) => ({
+        id: licence.id,
+        class: licence.class,
         jurisdiction: licence.jurisdiction,
         number: licence.number,
         validFrom: licence.validFrom,
         validUntil: licence.validUntil,
+        lastDay: licence.lastDay,
+        state: licence.state,
+        warning: licence.warning,
         validToday: licence.state === 'valid',
       })),
       mayPractise: person.roles.includes('veterinarian') && person.licenceState === 'valid',
+      signingLockedUntil: person.signingLockedUntil,
       preferences: await people.readPreferences(person.id),
       facility: {
         name: await facility.valueOf('facility.name'),

@@ -9,13 +9,13 @@ import { readSignedText } from './signing.reads.ts'
 import { createSigningService } from './signing.service.ts'
 
 export { withFault } from './with-fault.ts'
-export type { Signatory, SigningService } from './signing.service.ts'
+export type { Signatory, SigningAsked, SigningService } from './signing.service.ts'
 export const signingEntities = [SignedText]
 
 export function createSigning(parts: Parts & { signer: Signer; facility: FacilityService; people: People }) {
   const service = createSigningService({
     ...parts,
-    validLicence: (personId, at) => parts.people.questions.validLicence(personId, at),
+    signingLicence: parts.people.questions.signingLicence,
     ownPassword: parts.people.ownPassword,
     readSignedText: (id) => readSignedText(parts.dataSource, id),
   })

@@ -1,7 +1,11 @@
+import type { ControlledSchedule } from '../../../shared/domain/licences/controlled-agents.ts'
+import type { SigningLack } from '../../../shared/domain/licences/signing-licence.ts'
+import { sayLacks } from '../../../shared/messages/signing.ts'
 import { canonicalJson } from '../../../shared/domain/canonical-json.ts'
 import type { Json } from '../../../shared/domain/canonical-json.ts'
 import type { SignatureBlock } from '../../../shared/contracts/signing.contract.ts'
-import { decide } from '../../../shared/domain/permissions/decide.ts'
+import { decide, rolesThatMay } from '../../../shared/domain/permissions/decide.ts'
+import { permissionWords } from '../../../shared/messages/permissions.ts'
 import type { Action } from '../../../shared/domain/permissions/table.ts'
 import type { Tx } from '../../platform/database/transactions.ts'
 import type { Ids } from '../../platform/ids.ts'
@@ -10,7 +14,8 @@ import type { RequestContext } from '../../platform/http/request-context.ts'
 import type { OwnPassword } from '../../platform/sign-in/own-password.ts'
 import type { Signer } from '../../platform/signatures/signer.ts'
 import type { FacilityService } from '../facility/index.ts'
-import type { ValidLicence } from '../people/index.ts'
+import { asSigned } from '../people/index.ts'
+import type { PeopleQuestions, ValidLicence } from '../people/index.ts'
 import { insertSignedText } from './signing.repository.ts'
 import type { SignedText } from './signed-text.entity.ts'
 
@@ -19,7 +24,7 @@ export interface SigningParts {
   signer: Signer
   ownPassword: OwnPassword
   facility: FacilityService
-  validLicence(personId: string, at: Date): Promise<ValidLicence | null>
+  signingLicence: PeopleQuestions['signingLicence']
   readSignedText(id: string): Promise<SignedText | null>
 }
 
@@ -28,6 +33,33 @@ export interface Signatory {
   personId: string
   printedName: string
   licence: ValidLicence
+  /** The registration that a controlled drug is signed under; null of everything else. */
+  registration: ValidLicence | null
+}
+
+/** What is asked of a signer beyond the password. */
+export interface SigningAsked {
+  /** The licence the signer chose; where only one is valid it need not be named. */
+  licenceId?: string | undefined
+  /** Schedule of the controlled drug that is signed for: it wants a registration of the signer besides the licence. */
+  controlledSchedule?: ControlledSchedule | null
+}
+
+/** How what lacks is refused: what is wrong with the licence comes before what is wrong with the registration. */
+function refuseLacking(lacks: readonly SigningLack[]): never {
+  const [first] = lacks
+  const detail = sayLacks(lacks)
+  const codes = lacks.map(({ code }) => code)
+  if (first?.code === 'licence-not-chosen' || first?.code === 'chosen-licence-not-valid')
+    throw new Problem(first.code === 'licence-not-chosen' ? 'licence-not-chosen' : 'licence-not-valid', {
+      detail,
+      errors: [{ pointer: '/licenceId', detail, code: first.code }],
+      extra: { lacks: codes },
+    })
+  throw new Problem(first?.code.includes('registration') ? 'registration-needed' : 'licence-not-valid', {
+    detail,
+    extra: { lacks: codes },
+  })
 }
 
 export interface SealRequest {
@@ -43,7 +75,9 @@ export interface SealRequest {
 interface SignedBy {
   printedName: string
   role: string
-  licence: { jurisdiction: string; number: string; validUntil: string }
+  licence: ValidLicence
+  /** Of a controlled drug only. */
+  registration?: ValidLicence
   meaning: string
   signedAt: string
   signedOn: string
@@ -56,28 +90,53 @@ export function createSigningService(parts: SigningParts) {
 
     /**
      * Checks, before any lock is taken, that the person at the keyboard is the signer (password again; wrong tries count
-     * towards the lock) and holds a licence valid today for a jurisdiction the facility accepts.
+     * towards the lock) and holds a licence valid today for a jurisdiction the facility accepts: the only one, or the one
+     * they chose of several. For a controlled drug also a registration valid today for the jurisdiction of that licence.
+     *
+     * @refuses may-not | licence-not-valid | licence-not-chosen | registration-needed | password-wrong | sign-in-locked
      */
     async confirmSignatory(
       context: RequestContext,
       action: Action,
       password: string,
       at: Date,
+      asked: SigningAsked = {},
     ): Promise<Signatory> {
       const { personId, printedName, roles } = context.actor
       if (personId === null) throw new Problem('not-signed-in')
-      const licence = await parts.validLicence(personId, at)
-      const decision = decide(action, roles, { 'valid-licence': licence !== null })
-      if (!decision.allowed || !licence)
-        throw new Problem(decision.why === 'role' ? 'may-not' : 'licence-not-valid', {
-          detail:
-            'You can write, hold and stop. To sign, ask the administrator to enter a licence valid today.',
-        })
-      await parts.ownPassword.confirm(personId, password, {
+      if (!decide(action, roles).allowed)
+        throw new Problem('may-not', { detail: permissionWords.whoMay({ roles: rolesThatMay(action) }) })
+      const { licence, registration, lacks } = await parts.signingLicence(personId, at, {
+        chosenId: asked.licenceId ?? null,
+        controlledSchedule: asked.controlledSchedule ?? null,
+      })
+      if (!decide(action, roles, { 'valid-licence': licence !== null }).allowed || !licence)
+        return refuseLacking(lacks)
+      await parts.ownPassword.confirm(context, password, {
         pointer: '/password',
         detail: 'Nothing was signed. Type your own password.',
       })
-      return { personId, printedName, licence }
+      return {
+        personId,
+        printedName,
+        licence: asSigned(licence),
+        registration: registration && asSigned(registration),
+      }
+    },
+
+    /**
+     * What the person at the keyboard lacks to sign, before they do: for a screen or a preview. Asks for no password.
+     *
+     * @param asked as for {@link confirmSignatory}
+     */
+    async lacksToSign(context: RequestContext, at: Date, asked: SigningAsked = {}): Promise<SigningLack[]> {
+      const { personId } = context.actor
+      if (personId === null) throw new Problem('not-signed-in')
+      const { lacks } = await parts.signingLicence(personId, at, {
+        chosenId: asked.licenceId ?? null,
+        controlledSchedule: asked.controlledSchedule ?? null,
+      })
+      return lacks
     },
 
     /**
@@ -91,6 +150,7 @@ export function createSigningService(parts: SigningParts) {
         printedName: signatory.printedName,
         role: 'veterinarian',
         licence: { ...signatory.licence },
+        ...(signatory.registration ? { registration: { ...signatory.registration } } : {}),
         meaning,
         signedAt: tx.at.toISOString(),
         signedOn: await parts.facility.dateOf(tx.at, tx),
@@ -146,6 +206,7 @@ const goneSealed = (recordedAt: Date): Sealed => ({
     printedName: '',
     role: '',
     licence: null,
+    registration: null,
     meaning: '',
     signedAt: recordedAt.toISOString(),
     signedOn: recordedAt.toISOString().slice(0, 10),
@@ -169,6 +230,7 @@ export function presentSealed(row: SignedText, signer: Signer): Sealed {
       printedName: by?.printedName ?? '',
       role: by?.role ?? '',
       licence: by?.licence ?? null,
+      registration: by?.registration ?? null,
       meaning: by?.meaning ?? row.meaning,
       signedAt: by?.signedAt ?? row.signedAt.toISOString(),
       signedOn: by?.signedOn ?? row.signedAt.toISOString().slice(0, 10),

@@ -12,7 +12,7 @@ import { gatherDoses } from './gather-doses.ts'
 import type { GatheredDoses } from './gather-doses.ts'
 import { gatherBodies, gatherFlagged, gatherNotices } from './gather-observations.ts'
 import { gatherOrders } from './gather-orders.ts'
-import { gatherOwnLicence, gatherPeople } from './gather-people.ts'
+import { gatherOwnLicence, gatherPeople, locksShownHours } from './gather-people.ts'
 import { gatherOutsideCases, gatherQuarantine } from './gather-quarantine.ts'
 import { gatherRegister } from './gather-register.ts'
 import { gatherWater } from './gather-water.ts'
@@ -101,7 +101,11 @@ export function createTodayQueries(parts: TodayParts) {
           ? quarantine.observationQueries.observations({ bodies: 'to-name', limit: mostFlagged })
           : { rows: [] },
         seesLane('people')
-          ? Promise.all([parts.people.questions.accounts(now), facility.listSettings()])
+          ? Promise.all([
+              parts.people.questions.accounts(now),
+              facility.listSettings(),
+              parts.people.questions.signingLocks(new Date(now.getTime() - locksShownHours * 3_600_000)),
+            ])
           : null,
         sees('observation') ? parts.handover.notesSince(handoverSince(now), actor.personId) : none,
         sees('own-licence') ? gatherOwnLicence(parts.people, moment) : none,

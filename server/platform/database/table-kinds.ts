@@ -20,6 +20,8 @@ export const tableKinds: Record<string, TableKind> = {
   person_roles: 'draft',
   licences: 'ledger',
   licence_voids: 'ledger',
+  licence_ends: 'ledger',
+  signing_locks: 'ledger',
   sign_in_tries: 'ledger',
   setting_versions: 'ledger',
   setting_confirmations: 'ledger',

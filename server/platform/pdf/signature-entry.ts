@@ -11,7 +11,7 @@ function checkWordsOf({ state, fault }: SignatureBlock): string {
 
 /** The signature and licence block as paper shows it, with the outcome of the check made now. */
 export function signatureEntry(block: SignatureBlock): SignatureEntry {
-  const { licence } = block
+  const { licence, registration } = block
   return {
     name: block.printedName,
     role: documentWords.signerRole,
@@ -19,6 +19,14 @@ export function signatureEntry(block: SignatureBlock): SignatureEntry {
       ? documentWords.licence({ number: licence.number, until: sayDate(licence.validUntil) })
       : documentWords.licenceUnreadable,
     ...(licence ? { jurisdiction: licence.jurisdiction } : {}),
+    ...(registration
+      ? {
+          registration: documentWords.registration({
+            number: registration.number,
+            until: sayDate(registration.validUntil),
+          }),
+        }
+      : {}),
     meaning: documentWords.signedAs({ meaning: block.meaning }),
     signedAt: sayInstantWithOffset(block.signedAt, block.zone, 'second'),
     check: block.state === 'intact' ? 'intact' : 'broken',

@@ -1,6 +1,10 @@
+import { signingWords } from '../../../shared/messages/signing.ts'
+import type { Clock } from '../clock.ts'
 import { Problem } from '../http/problem.ts'
-import type { Lockout } from './lockout.ts'
+import type { RequestContext } from '../http/request-context.ts'
+import { createTurns } from '../in-turn.ts'
 import { isPassword } from './passwords.ts'
+import type { SigningLock } from './signing-lock.ts'
 
 /** Asks somebody who is signed in for their own password once more. */
 export interface OwnPassword {
@@ -8,7 +12,9 @@ export interface OwnPassword {
    * @param refusal what a wrong one is answered with
    * @refuses sign-in-locked, password-wrong
    */
-  confirm(personId: string, typed: string, refusal: { pointer: string; detail: string }): Promise<void>
+  confirm(context: RequestContext, typed: string, refusal: { pointer: string; detail: string }): Promise<void>
+  /** For what is confirmed by signing in alone. @refuses sign-in-locked */
+  refuseWhileLocked(personId: string): Promise<void>
 }
 
 /**
@@ -16,26 +22,51 @@ export interface OwnPassword {
  * page left open does not get further tries by going to another form.
  */
 export function createOwnPassword(parts: {
-  lockout: Lockout
+  signingLock: SigningLock
+  clock: Clock
   readPasswordHash(personId: string): Promise<string | null>
 }): OwnPassword {
+  const { signingLock, clock } = parts
+  const inTurn = createTurns()
+  const secondsTo = (until: Date) => Math.ceil((until.getTime() - clock.now().getTime()) / 1000)
+  const minutesTo = (until: Date) => Math.ceil(secondsTo(until) / 60)
+  const saidLock = (until: Date) => ({
+    retry_after_seconds: minutesTo(until) * 60,
+    locked_until: until.toISOString(),
+  })
+
+  function refuse(until: Date | null): void {
+    if (until === null) return
+    throw new Problem('sign-in-locked', {
+      detail: signingWords.lockedFor({ minutes: minutesTo(until) }),
+      extra: saidLock(until),
+    })
+  }
+
   return {
-    async confirm(personId, typed, { pointer, detail }) {
-      const tried = { emailKey: `own:${personId}`, address: '' }
-      const right = await parts.lockout.attempt(
-        tried,
-        async () => {
-          const hash = await parts.readPasswordHash(personId)
-          if (hash === null) throw new Problem('not-signed-in')
-          return (await isPassword(hash, typed)) || null
-        },
-        (minutes) => `Wait ${String(minutes)} min before you type your password again.`,
-      )
-      if (!right)
+    refuseWhileLocked: async (personId) => refuse(await signingLock.lockedUntil(personId)),
+    async confirm(context, typed, { pointer, detail }) {
+      const { personId } = context.actor
+      if (personId === null) throw new Problem('not-signed-in')
+      // one after another in this process: right ones typed at the same moment do not count against each other
+      await inTurn(personId, async () => {
+        refuse(await signingLock.reserve(context, personId))
+        const hash = await parts.readPasswordHash(personId)
+        if (hash === null) throw new Problem('not-signed-in')
+        if (await isPassword(hash, typed)) return signingLock.noteRight(personId)
+        const until = await signingLock.noteWrong(context, personId)
+        const says = until === null ? detail : signingWords.lockedNow({ minutes: minutesTo(until) })
         throw new Problem('password-wrong', {
-          detail,
-          errors: [{ pointer, detail: 'That is not your password.' }],
+          detail: says,
+          errors: [
+            {
+              pointer,
+              detail: until === null ? signingWords.passwordWrong : `${signingWords.passwordWrong} ${says}`,
+            },
+          ],
+          ...(until === null ? {} : { extra: saidLock(until) }),
         })
+      })
     },
   }
 }

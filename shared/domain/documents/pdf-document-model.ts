@@ -193,6 +193,8 @@ export interface SignatureEntry {
   /** "licence VL-20417, valid to 30 Sep 2026"; absent for who signs without one (a witness). */
   licence?: string
   jurisdiction?: string
+  /** The controlled-substance registration, of what was signed under one. */
+  registration?: string
   /** "Signed as author of this order" */
   meaning: string
   /** Date, time to the second, zone. */

@@ -1,22 +1,43 @@
 import type { FacilityDate } from '../time/instant.ts'
-
-export type LicenceState = 'valid' | 'not-yet' | 'expired' | 'void' | 'not-accepted-here'
+import { isAcceptedHere, lastDayOf } from './licence-classes.ts'
+import type { HeldLicence } from './licence-classes.ts'
 
 /**
- * What a licence to practise is worth on a day at this facility.
+ * - `valid`             counts on the day
+ * - `not-yet`           its first day is still to come
+ * - `expired`           its last day as printed is over
+ * - `ended`             was ended before its last day, and that day is over
+ * - `void`              entered wrongly or withdrawn
+ * - `superseded`        corrected: another entry stands in its place
+ * - `not-accepted-here` of a jurisdiction that is not on the facility's list
+ */
+export const licenceStateNames = [
+  'valid',
+  'not-yet',
+  'expired',
+  'ended',
+  'void',
+  'superseded',
+  'not-accepted-here',
+] as const
+export type LicenceState = (typeof licenceStateNames)[number]
+
+/**
+ * What a licence is worth on a day at this facility.
  *
- * @param licence        its period, both days included, and whether it was voided
- * @param on             facility date of the act
- * @param accepted       jurisdictions the facility accepts, compared without regard to case
+ * @param licence  its period, both days included, and what became of it
+ * @param on       facility date of the act
+ * @param accepted jurisdictions the facility accepts, compared without regard to case
  */
 export function licenceState(
-  licence: { jurisdiction: string; validFrom: FacilityDate; validUntil: FacilityDate; void: boolean },
+  licence: Pick<HeldLicence, 'jurisdiction' | 'validFrom' | 'validUntil' | 'endedOn' | 'void' | 'superseded'>,
   on: FacilityDate,
   accepted: readonly string[],
 ): LicenceState {
   if (licence.void) return 'void'
-  if (on < licence.validFrom) return 'not-yet'
+  if (licence.superseded) return 'superseded'
   if (on > licence.validUntil) return 'expired'
-  const same = (name: string) => name.trim().toLowerCase() === licence.jurisdiction.trim().toLowerCase()
-  return accepted.some(same) ? 'valid' : 'not-accepted-here'
+  if (on > lastDayOf(licence)) return 'ended'
+  if (on < licence.validFrom) return 'not-yet'
+  return isAcceptedHere(licence.jurisdiction, accepted) ? 'valid' : 'not-accepted-here'
 }

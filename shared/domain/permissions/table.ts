@@ -121,7 +121,7 @@ export const permissions = {
     'may-write-parent',
     'may-write-parent',
     'may-write-parent',
-    'no',
+    'may-write-parent',
   ),
   'people.manage': row('no', 'no', 'no', 'no', 'yes'),
   'facility.read': row('yes', 'yes', 'yes', 'yes', 'yes'),

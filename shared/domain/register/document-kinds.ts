@@ -1,6 +1,7 @@
-/** Kinds of paper that are kept with a transaction or a permit. */
+/** Kinds of paper that are kept with a transaction, a permit or a licence. */
 export const documentKinds = [
   'permit',
+  'licence',
   'health-certificate',
   'invoice',
   'loan-agreement',

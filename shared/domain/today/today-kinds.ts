@@ -50,6 +50,8 @@ export const todayKinds = {
   'permit-marks': { lane: 'register', action: 'register.manage' },
   'permit-runs-out': { lane: 'register', action: 'register.manage' },
   'account-without-licence': { lane: 'people', action: 'people.manage' },
+  'licence-ends': { lane: 'people', action: 'people.manage' },
+  'signing-locked': { lane: 'people', action: 'people.manage' },
   'account-without-sign-in': { lane: 'people', action: 'people.manage' },
   'setting-proposed': { lane: 'people', action: 'facility.manage' },
   'settings-default': { lane: 'people', action: 'facility.manage' },

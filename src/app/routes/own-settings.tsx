@@ -1,8 +1,8 @@
 import { frameWords } from '../../../shared/messages/frame.ts'
 import { ownSettingsWords } from '../../../shared/messages/own-settings.ts'
-import { sayDate } from '../../../shared/messages/say-date.ts'
 import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
+import { OwnLicences } from '../../features/licences/index.ts'
 import { useMe } from '../../lib/me.ts'
 import { useSetPreference } from '../../lib/preferences.ts'
 import type { PreferenceName } from '../../lib/preferences.ts'
@@ -10,7 +10,6 @@ import { isProblem } from '../../lib/problem-error.ts'
 import { chooseTheme, themeChoices, useThemeChoice } from '../../lib/theme.ts'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { ChoiceField } from '../../ui/choice-field.tsx'
-import { FlagWords } from '../../ui/flag-mark.tsx'
 import { SelectField } from '../../ui/select-field.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { Tick } from '../../ui/tick.tsx'
@@ -36,24 +35,7 @@ export function Component() {
     <Sheet recipe="list">
       <Area>
         <Cartouche place={me.printedName} title={ownSettingsWords.title} source={ownSettingsWords.source} />
-        <section className="pane stack">
-          <h2 className="t-head">{ownSettingsWords.licences}</h2>
-          {me.licences.length === 0 ? <p className="t-2">{ownSettingsWords.noLicence}</p> : null}
-          {me.licences.map((licence) => (
-            <div key={`${licence.jurisdiction} ${licence.number}`}>
-              <FlagWords flag={licence.validToday ? 'C' : 'N'}>
-                {licence.validToday ? ownSettingsWords.licenceValid : ownSettingsWords.licenceNotValid}
-              </FlagWords>
-              <p className="t-2">
-                {ownSettingsWords.licenceLine({
-                  number: licence.number,
-                  jurisdiction: licence.jurisdiction,
-                  until: sayDate(licence.validUntil),
-                })}
-              </p>
-            </div>
-          ))}
-        </section>
+        <OwnLicences />
       </Area>
       <Area className="pane stack gap-6">
         <WrongSummary fields={[]} general={isProblem(keep.error) ? keep.error.says : undefined} />

@@ -33,7 +33,7 @@ async function attachAll(transaction: Transaction, papers: readonly PaperGiven[]
   const left: Recorded['left'] = []
   for (const paper of papers) {
     try {
-      await sendPaper(attachTransactionDocument, transaction.number, paper)
+      await sendPaper({ contract: attachTransactionDocument, params: { number: transaction.number } }, paper)
     } catch (error) {
       if (!isProblem(error)) throw error
       left.push({ paper, says: error.says })

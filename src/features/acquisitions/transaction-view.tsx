@@ -95,7 +95,7 @@ export function TransactionView({ transaction }: { transaction: Transaction }) {
           mayAttach={transaction.may.includes('document.attach')}
           target={{
             contract: attachTransactionDocument,
-            number: transaction.number,
+            params: { number: transaction.number },
             readAgain: transactionsKey,
           }}
         />

@@ -5,6 +5,7 @@ import type { CautionRuleId } from '../../../shared/domain/cautions/caution-rule
 import { ruleSheetWords as words } from '../../../shared/messages/caution-rules-sheet.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
+import { useMay } from '../../lib/may.ts'
 import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
@@ -15,6 +16,7 @@ import { TextField } from '../../ui/text-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { SignerLines, useSigner } from '../licences/index.ts'
 import { useConfirm } from './mutations.ts'
 import { needsJurisdiction } from './rules-model.ts'
 
@@ -36,6 +38,8 @@ export function ConfirmDialog({
   // what is confirmed is what stood there when it was asked for
   const [proposal] = useState(given)
   const confirm = useConfirm({ ruleId, key: parameter.key, proposalId: proposal.id })
+  const signer = useSigner()
+  const may = useMay('formulary.confirm')
   const refusal = useRefusal()
   const say = useToast()
   const [reason, setReason] = useState('')
@@ -54,11 +58,17 @@ export function ConfirmDialog({
     setMissing(false)
     const where = asksWhere ? { jurisdiction: jurisdiction.trim() } : {}
     const done = await refusal.attempt(() =>
-      confirm.mutateAsync({ key: newId(), password, reason: reason.trim(), ...where }),
+      confirm.mutateAsync({
+        key: newId(),
+        password,
+        licenceId: signer.licenceId,
+        reason: reason.trim(),
+        ...where,
+      }),
     )
     // a password is typed for one attempt
     setPassword('')
-    if (!done) return
+    if (!done) return signer.readAgain()
     say({ words: words.confirmed })
     onBack()
   }
@@ -69,7 +79,13 @@ export function ConfirmDialog({
       onBack={onBack}
       acts={
         <>
-          <Button kind="primary" icon={BadgeCheck} disabled={refusal.busy} onClick={() => void send()}>
+          <Button
+            kind="primary"
+            icon={BadgeCheck}
+            disabled={refusal.busy}
+            shut={signer.shut ?? false}
+            onClick={() => void send()}
+          >
             {words.confirm}
           </Button>
           <Button onClick={onBack}>{words.back}</Button>
@@ -111,13 +127,18 @@ export function ConfirmDialog({
           wrong={refusal.at('/reason') ?? missing(has.reason)}
           onChange={(event) => setReason(event.target.value)}
         />
-        <PasswordField
-          label={words.password}
-          autoComplete="off"
-          value={password}
-          wrong={refusal.at('/password') ?? missing(has.password)}
-          onChange={(event) => setPassword(event.target.value)}
-        />
+        <div className="signature-who">
+          <SignerLines signer={signer} may={may} />
+        </div>
+        {signer.lockedUntil === null ? (
+          <PasswordField
+            label={words.password}
+            autoComplete="off"
+            value={password}
+            wrong={refusal.at('/password') ?? missing(has.password)}
+            onChange={(event) => setPassword(event.target.value)}
+          />
+        ) : null}
       </div>
     </Dialog>
   )

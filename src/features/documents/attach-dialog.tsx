@@ -1,6 +1,4 @@
 import { useState } from 'react'
-import type { attachPermitDocument } from '../../../shared/contracts/permits.contract.ts'
-import type { attachTransactionDocument } from '../../../shared/contracts/acquisitions.contract.ts'
 import { paperWords as words } from '../../../shared/messages/documents-sheet.ts'
 import { formWords } from '../../../shared/messages/form.ts'
 import { newId } from '../../lib/new-id.ts'
@@ -10,23 +8,19 @@ import { Dialog } from '../../ui/dialog.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { useAttachPaper } from './mutations.ts'
-import type { PaperGiven } from './mutations.ts'
+import type { PaperGiven, PaperParent } from './mutations.ts'
 import { paperFaults, PaperFields } from './paper-fields.tsx'
 import type { PaperFaults } from './paper-fields.tsx'
 
 /** The record that papers are attached to, and what is read again afterwards. */
-export interface AttachTarget {
-  contract: typeof attachPermitDocument | typeof attachTransactionDocument
-  number: string
-  readAgain: readonly string[]
-}
+export type AttachTarget = PaperParent & { readAgain: readonly string[] }
 
 export const blankPaper = (): PaperGiven => ({ id: newId(), title: '', kind: '', file: null })
 
 export function AttachDialog({ target, onBack }: { target: AttachTarget; onBack: () => void }) {
   const [paper, setPaper] = useState(blankPaper)
   const [faults, setFaults] = useState<PaperFaults>({})
-  const attach = useAttachPaper(target.contract, target.number, target.readAgain)
+  const attach = useAttachPaper(target, target.readAgain)
   const say = useToast()
   const send = () => {
     const missing = paperFaults(paper)

@@ -1,6 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { voidDocument } from '../../../shared/contracts/documents.contract.ts'
 import type { attachPermitDocument } from '../../../shared/contracts/permits.contract.ts'
+import type { attachLicenceDocument } from '../../../shared/contracts/people.contract.ts'
 import type { attachTransactionDocument } from '../../../shared/contracts/acquisitions.contract.ts'
 import { api } from '../../lib/api-client.ts'
 
@@ -13,24 +14,33 @@ export interface PaperGiven {
   file: File | null
 }
 
-type AttachContract = typeof attachPermitDocument | typeof attachTransactionDocument
+/** The record that a paper belongs to: where it is sent, and which record that is. */
+export type PaperParent =
+  | {
+      contract: typeof attachPermitDocument | typeof attachTransactionDocument
+      params: { number: string }
+    }
+  | { contract: typeof attachLicenceDocument; params: { id: string; licenceId: string } }
 
 /** Sends one paper to the record it belongs to. */
-export function sendPaper(of: AttachContract, number: string, paper: PaperGiven) {
+export function sendPaper(parent: PaperParent, paper: PaperGiven) {
   const form = new FormData()
   form.set('id', paper.id)
   form.set('title', paper.title)
   form.set('kind', paper.kind)
   // last, so that the fields are read before the bytes
   if (paper.file) form.set('file', paper.file)
-  return api(of, { params: { number }, body: form, patienceMs: 120_000 })
+  const sent = { body: form, patienceMs: 120_000 }
+  return 'number' in parent.params
+    ? api(parent.contract as typeof attachPermitDocument, { params: parent.params, ...sent })
+    : api(parent.contract as typeof attachLicenceDocument, { params: parent.params, ...sent })
 }
 
 /** Attaches a paper to a record and reads the record again. */
-export function useAttachPaper(of: AttachContract, number: string, readAgain: readonly string[]) {
+export function useAttachPaper(parent: PaperParent, readAgain: readonly string[]) {
   const client = useQueryClient()
   return useMutation({
-    mutationFn: (paper: PaperGiven) => sendPaper(of, number, paper),
+    mutationFn: (paper: PaperGiven) => sendPaper(parent, paper),
     onSuccess: () => client.invalidateQueries({ queryKey: [...readAgain] }),
   })
 }

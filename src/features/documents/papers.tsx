@@ -19,15 +19,16 @@ import { paperAddress } from './queries.ts'
 export function Papers({
   papers,
   target,
-  mayAttach,
+  mayAttach = false,
 }: {
   papers: readonly AttachedDocument[]
-  target: AttachTarget
-  mayAttach: boolean
+  /** Where more are attached; not needed where they are only read. */
+  target?: AttachTarget
+  mayAttach?: boolean
 }) {
   const [attaching, setAttaching] = useState(false)
   const [voiding, setVoiding] = useState<{ paper: AttachedDocument; key: string } | null>(null)
-  const voidPaper = useVoidPaper(target.readAgain)
+  const voidPaper = useVoidPaper(target?.readAgain ?? [])
   return (
     <div className="stack">
       {papers.length === 0 ? <p className="t-2">{words.none}</p> : null}
@@ -47,7 +48,7 @@ export function Papers({
           </Button>
         </div>
       ) : null}
-      {attaching ? <AttachDialog target={target} onBack={() => setAttaching(false)} /> : null}
+      {attaching && target ? <AttachDialog target={target} onBack={() => setAttaching(false)} /> : null}
       {voiding ? (
         <ReasonDialog
           question={words.voidQuestion({ title: voiding.paper.title })}

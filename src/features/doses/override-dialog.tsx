@@ -12,6 +12,7 @@ import { PasswordField } from '../../ui/password-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { SignerLines, useSigner } from '../licences/index.ts'
 import { useOverrideStop } from './mutations.ts'
 
 type Stop = BathSheet['cautions'][number]
@@ -35,6 +36,8 @@ export function OverrideAct({ sheet, stop }: { sheet: BathSheet; stop: Stop }) {
 
 /** Signs an override: what stops, why it is given all the same, and the password again. */
 function OverrideDialog({ sheet, stop, onBack }: { sheet: BathSheet; stop: Stop; onBack: () => void }) {
+  const signer = useSigner()
+  const may = useMay('caution.override')
   const override = useOverrideStop({ number: sheet.number, key: sheet.key })
   const refusal = useRefusal()
   const say = useToast()
@@ -52,6 +55,7 @@ function OverrideDialog({ sheet, stop, onBack }: { sheet: BathSheet; stop: Stop;
       override.mutateAsync({
         commandKey: newId(),
         password,
+        licenceId: signer.licenceId,
         ruleId,
         code,
         finding,
@@ -61,7 +65,7 @@ function OverrideDialog({ sheet, stop, onBack }: { sheet: BathSheet; stop: Stop;
     )
     // a password is typed for one attempt
     setPassword('')
-    if (!done) return
+    if (!done) return signer.readAgain()
     say({ words: words.done })
     onBack()
   }
@@ -77,6 +81,7 @@ function OverrideDialog({ sheet, stop, onBack }: { sheet: BathSheet; stop: Stop;
             size="touch"
             icon={PenLine}
             disabled={refusal.busy}
+            shut={signer.shut ?? false}
             onClick={() => void send()}
           >
             {words.sign}
@@ -101,13 +106,18 @@ function OverrideDialog({ sheet, stop, onBack }: { sheet: BathSheet; stop: Stop;
           wrong={isMissing && reason.trim().length < shortest ? formWords.needed : refusal.at('/reason')}
           onChange={(event) => setReason(event.target.value)}
         />
-        <PasswordField
-          label={words.password}
-          autoComplete="off"
-          value={password}
-          wrong={refusal.at('/password') ?? (isMissing && password === '' ? formWords.needed : undefined)}
-          onChange={(event) => setPassword(event.target.value)}
-        />
+        <div className="signature-who">
+          <SignerLines signer={signer} may={may} />
+        </div>
+        {signer.lockedUntil === null ? (
+          <PasswordField
+            label={words.password}
+            autoComplete="off"
+            value={password}
+            wrong={refusal.at('/password') ?? (isMissing && password === '' ? formWords.needed : undefined)}
+            onChange={(event) => setPassword(event.target.value)}
+          />
+        ) : null}
       </div>
     </Dialog>
   )

@@ -4,6 +4,7 @@ import { Link, useLocation, useNavigate } from 'react-router-dom'
 import { Save } from 'lucide-react'
 import type { BathOrderFields, BenchAsked, SaidBench } from '../../../shared/contracts/order-primitives.ts'
 import type { Order } from '../../../shared/contracts/orders.contract.ts'
+import { scheduleOf } from '../../../shared/domain/licences/controlled-agents.ts'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
 import { orderListWords, orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { relationshipWords } from '../../../shared/messages/orders.ts'
@@ -23,6 +24,7 @@ import { useToast } from '../../ui/toast-context.ts'
 import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { formularyQuery } from '../formulary/index.ts'
+import { useSigner } from '../licences/index.ts'
 import { answersToSend, noAnswers, whyNotSign } from './answers-model.ts'
 import type { Answers } from './answers-model.ts'
 import { CarriedIntoOrder } from './carried-order.tsx'
@@ -79,6 +81,8 @@ export function OrderForm({
   )
   const [tried, setTried] = useState(false)
   const { data: formulary } = useQuery(formularyQuery)
+  const product = formulary?.products.find((one) => one.id === values.productId)
+  const signer = useSigner(product ? scheduleOf(product.agent) : null)
   const { fields, faults } = useMemo(() => fieldsOf(values, zone), [values, zone])
   const writing = useOrderWriting(opened, useState(() => fieldsOf(start, zone).fields)[0])
   const text = JSON.stringify(fields)
@@ -127,10 +131,14 @@ export function OrderForm({
     if (!fields || !judged) return false
     const order = await writing.signNow(fields, {
       password,
+      licenceId: signer.licenceId,
       ...(stated ? { relationship: true } : {}),
       ...answersToSend(judged.cautions, answers),
     })
-    if (!order) return false
+    if (!order) {
+      signer.readAgain()
+      return false
+    }
     letGo()
     say({ words: words.signed({ number: order.number }) })
     void navigate(paths.order(order.number))
@@ -261,6 +269,7 @@ export function OrderForm({
         )}
         <div className="pane">
           <SignBlock
+            signer={signer}
             shut={whyNotSign({ preview: judged, current, answers, faults: faults.length })}
             missing={judged?.missing ?? []}
             busy={writing.busy === 'sign'}

@@ -1,20 +1,21 @@
 import { useState } from 'react'
 import { PenLine } from 'lucide-react'
 import { orderFormWords as words } from '../../../shared/messages/order-form.ts'
-import { sayDate } from '../../../shared/messages/say-date.ts'
 import { useMay } from '../../lib/may.ts'
-import { useMe } from '../../lib/me.ts'
 import { Button } from '../../ui/button.tsx'
 import { PasswordField } from '../../ui/password-field.tsx'
 import { SignatureBlock } from '../../ui/signature-block.tsx'
 import { Tick } from '../../ui/tick.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { SignerLines } from '../licences/index.ts'
+import type { Signer } from '../licences/index.ts'
 
 /**
  * Where an order is signed: as what, by whom with which licence, and the password again. Whoever cannot sign is told
  * why, in place of the field.
  */
 export function SignBlock({
+  signer,
   shut,
   missing,
   busy,
@@ -23,6 +24,7 @@ export function SignBlock({
   statement = null,
   onSign,
 }: {
+  signer: Signer
   /** Why the order can't be signed as it stands. */
   shut: string | undefined
   missing: readonly string[]
@@ -34,7 +36,6 @@ export function SignBlock({
   statement?: { heading: string; text: string; needed: string } | null
   onSign: (password: string, stated: boolean) => Promise<boolean>
 }) {
-  const me = useMe()
   const may = useMay('order.sign')
   const [password, setPassword] = useState('')
   const [asked, setAsked] = useState(false)
@@ -42,8 +43,6 @@ export function SignBlock({
   // ticked for this text: another statement has to be read anew
   const [statedFor, setStatedFor] = useState<string | null>(null)
   const stated = statement !== null && statedFor === statement.text
-  const valid = me.licences.find((licence) => licence.validToday)
-  const ended = [...me.licences].sort((a, b) => b.validUntil.localeCompare(a.validUntil))[0]
   const send = async () => {
     setAsked(true)
     setTried(true)
@@ -54,20 +53,8 @@ export function SignBlock({
   }
   return (
     <div id="sign" tabIndex={-1}>
-      <SignatureBlock
-        meaning={words.sign}
-        who={
-          valid
-            ? words.signWho({
-                name: me.printedName,
-                jurisdiction: valid.jurisdiction,
-                number: valid.number,
-                until: sayDate(valid.validUntil),
-              })
-            : me.printedName
-        }
-      >
-        {may.allowed ? (
+      <SignatureBlock meaning={words.sign} who={<SignerLines signer={signer} may={may} />}>
+        {may.allowed && signer.lockedUntil === null ? (
           <form
             className="stack"
             noValidate
@@ -115,23 +102,19 @@ export function SignBlock({
               }
               general={refused}
             />
-            <Button kind="primary" icon={PenLine} type="submit" shut={busy ? words.signing : shut}>
+            <Button
+              kind="primary"
+              icon={PenLine}
+              type="submit"
+              shut={busy ? words.signing : (shut ?? signer.shut)}
+            >
               {words.signAct}
             </Button>
           </form>
         ) : (
-          <div className="stack">
-            <p>
-              {me.roles.includes('veterinarian')
-                ? ended
-                  ? words.licenceEnded({ number: ended.number, until: sayDate(ended.validUntil) })
-                  : words.noLicence
-                : may.why}
-            </p>
-            <Button icon={PenLine} shut={may.why ?? ''}>
-              {words.signAct}
-            </Button>
-          </div>
+          <Button icon={PenLine} shut={signer.lockedUntil === null ? (may.why ?? '') : (signer.shut ?? '')}>
+            {words.signAct}
+          </Button>
         )}
       </SignatureBlock>
     </div>

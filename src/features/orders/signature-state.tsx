@@ -5,6 +5,7 @@ import { documentWords } from '../../../shared/messages/documents.ts'
 import { orderViewWords as words } from '../../../shared/messages/orders-screens.ts'
 import { relationshipWords } from '../../../shared/messages/orders.ts'
 import { faultWords, sayFault } from '../../../shared/messages/record-fault.ts'
+import { signingWords } from '../../../shared/messages/signing.ts'
 import { sayDate, sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { Icon } from '../../ui/icon.tsx'
 import { SignatureBlock } from '../../ui/signature-block.tsx'
@@ -39,7 +40,7 @@ export function OrderSignature({
   /** What the signer stated besides, as it was signed. */
   stated?: string | null
 }) {
-  const { licence, state } = signature
+  const { licence, registration, state } = signature
   const fingerprint = formatFingerprint(signature.hash)
   return (
     <SignatureBlock
@@ -56,6 +57,15 @@ export function OrderSignature({
                   until: sayDate(licence.validUntil),
                 })}
           </span>
+          {registration === null ? null : (
+            <span className="block">
+              {signingWords.registration({
+                jurisdiction: registration.jurisdiction,
+                number: registration.number,
+                until: sayDate(registration.validUntil),
+              })}
+            </span>
+          )}
         </>
       }
     >

@@ -19,6 +19,7 @@ interface Kept {
 
 export interface SignRequest {
   password: string
+  licenceId: string | undefined
   relationship?: true
   read: AnsweredCaution[]
   overrides: (AnsweredCaution & { reason: string })[]

@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { useForm } from 'react-hook-form'
+import type { UseFormRegister } from 'react-hook-form'
 import type { BodyOf } from '../../../shared/contracts/contract.ts'
 import { enterLicence } from '../../../shared/contracts/people.contract.ts'
 import { peopleWords } from '../../../shared/messages/people.ts'
@@ -7,16 +8,16 @@ import { applyProblem } from '../../lib/apply-problem.ts'
 import { bodyResolver } from '../../lib/body-resolver.ts'
 import { newId } from '../../lib/new-id.ts'
 import { isProblem } from '../../lib/problem-error.ts'
-import { typedText } from '../../lib/typed-text.ts'
 import { Button } from '../../ui/button.tsx'
-import { TextField } from '../../ui/text-field.tsx'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
+import { LicenceFields, typedLicence } from './licence-fields.tsx'
+import type { LicenceFieldsBody } from './licence-fields.tsx'
 import { useEnterLicence } from './mutations.ts'
 import { useTellUnsaved } from './use-tell-unsaved.ts'
 
 type Body = BodyOf<typeof enterLicence>
 
-/** A licence as it stands on paper: who granted it, number, first and last day. */
+/** Enters a licence or a registration; which of the two it is nobody presumes. */
 export function LicenceForm({
   personId,
   onDone,
@@ -30,13 +31,7 @@ export function LicenceForm({
   const [refused, setRefused] = useState<string | undefined>()
   const enter = useEnterLicence(personId)
   const form = useForm<Body>({
-    resolver: bodyResolver(enterLicence.body, (typed) => ({
-      id: typed.id,
-      jurisdiction: typedText(typed.jurisdiction),
-      number: typedText(typed.number),
-      validFrom: typedText(typed.validFrom),
-      validUntil: typedText(typed.validUntil),
-    })),
+    resolver: bodyResolver(enterLicence.body, (typed) => ({ id: typed.id, ...typedLicence(typed) })),
     defaultValues: { id, jurisdiction: '', number: '', validFrom: '', validUntil: '' },
   })
   const { errors, isDirty } = form.formState
@@ -53,24 +48,9 @@ export function LicenceForm({
   return (
     <form className="stack max-w-[460px]" noValidate onSubmit={submit}>
       <WrongSummary fields={[]} general={refused} />
-      <TextField
-        label={peopleWords.jurisdiction}
-        hint={peopleWords.jurisdictionHint}
-        wrong={errors.jurisdiction?.message}
-        {...form.register('jurisdiction')}
-      />
-      <TextField label={peopleWords.number} wrong={errors.number?.message} {...form.register('number')} />
-      <TextField
-        label={peopleWords.validFrom}
-        type="date"
-        wrong={errors.validFrom?.message}
-        {...form.register('validFrom')}
-      />
-      <TextField
-        label={peopleWords.validUntil}
-        type="date"
-        wrong={errors.validUntil?.message}
-        {...form.register('validUntil')}
+      <LicenceFields
+        register={form.register as unknown as UseFormRegister<LicenceFieldsBody>}
+        errors={errors}
       />
       <div className="row row-wrap">
         <Button kind="primary" type="submit" disabled={enter.isPending}>

@@ -1,13 +1,17 @@
 import { useState } from 'react'
 import type { Licence, Person } from '../../../shared/contracts/people.contract.ts'
-import { licenceStates, peopleWords } from '../../../shared/messages/people.ts'
-import { sayDate } from '../../../shared/messages/say-date.ts'
+import { peopleWords as words } from '../../../shared/messages/people.ts'
 import { Button } from '../../ui/button.tsx'
-import { FlagWords } from '../../ui/flag-mark.tsx'
+import { CorrectLicenceForm } from './correct-licence-form.tsx'
+import { EndLicenceDialog } from './end-licence-dialog.tsx'
+import { LicenceEntry } from './licence-entry.tsx'
+import type { LicenceAct } from './licence-entry.tsx'
 import { LicenceForm } from './licence-form.tsx'
 import { VoidLicenceDialog } from './void-licence-dialog.tsx'
 
-/** Every licence ever entered, voided ones with their reason. */
+const isGone = ({ state }: Licence) => state === 'void' || state === 'superseded'
+
+/** Every licence ever entered: those that stand, then the earlier entries, which stay readable. */
 export function LicenceList({
   person,
   onUnsaved,
@@ -15,43 +19,56 @@ export function LicenceList({
   person: Person
   onUnsaved: (unsaved: boolean) => void
 }) {
-  const [voiding, setVoiding] = useState<Licence | null>(null)
+  const [acting, setActing] = useState<{ act: LicenceAct; licence: Licence } | null>(null)
   const [adding, setAdding] = useState(false)
+  const standing = person.licences.filter((one) => !isGone(one))
+  const earlier = person.licences.filter(isGone)
+  const done = () => setActing(null)
+  const entry = (licence: Licence) => (
+    <LicenceEntry
+      key={licence.id}
+      personId={person.id}
+      licence={licence}
+      onAct={(act) => setActing({ act, licence })}
+    />
+  )
+  const line = (licence: Licence) =>
+    acting?.act === 'correct' && acting.licence.id === licence.id ? (
+      <li key={licence.id}>
+        <CorrectLicenceForm personId={person.id} licence={licence} onDone={done} onUnsaved={onUnsaved} />
+      </li>
+    ) : (
+      entry(licence)
+    )
   return (
-    <section className="stack">
+    <section className="stack" aria-labelledby="licences">
       <div className="row row-between row-wrap">
-        <h2 className="t-head">{peopleWords.licences}</h2>
+        <h2 id="licences" className="t-head">
+          {words.licences}
+        </h2>
         {adding ? null : (
           <Button size="small" onClick={() => setAdding(true)}>
-            {peopleWords.addLicence}
+            {words.addLicence}
           </Button>
         )}
       </div>
-      <p className="hint">{peopleWords.licencesHint}</p>
+      <p className="hint">{words.licencesHint}</p>
       {adding ? (
         <LicenceForm personId={person.id} onDone={() => setAdding(false)} onUnsaved={onUnsaved} />
       ) : null}
-      {person.licences.length === 0 ? <p className="t-2">{peopleWords.noLicences}</p> : null}
-      <ul className="stack">
-        {person.licences.map((licence) => (
-          <li key={licence.id} className="row row-between row-wrap border-b border-hair pb-2">
-            <div>
-              <FlagWords flag={licence.state === 'valid' ? 'C' : 'N'}>
-                {`${licence.jurisdiction}, ${licence.number}: ${licenceStates[licence.state]}`}
-              </FlagWords>
-              <p className="t-2">{`${sayDate(licence.validFrom)} – ${sayDate(licence.validUntil)}`}</p>
-              {licence.voidedReason ? <p className="t-2">{licence.voidedReason}</p> : null}
-            </div>
-            {licence.state === 'void' ? null : (
-              <Button size="small" onClick={() => setVoiding(licence)}>
-                {peopleWords.voidIt}
-              </Button>
-            )}
-          </li>
-        ))}
-      </ul>
-      {voiding ? (
-        <VoidLicenceDialog personId={person.id} licence={voiding} onBack={() => setVoiding(null)} />
+      {standing.length === 0 ? <p className="t-2">{words.noLicences}</p> : null}
+      <ul className="stack">{standing.map(line)}</ul>
+      {earlier.length > 0 ? (
+        <>
+          <h3 className="t-label">{words.earlier({ count: earlier.length })}</h3>
+          <ul className="stack">{earlier.map(entry)}</ul>
+        </>
+      ) : null}
+      {acting?.act === 'void' ? (
+        <VoidLicenceDialog personId={person.id} licence={acting.licence} onBack={done} />
+      ) : null}
+      {acting?.act === 'end' ? (
+        <EndLicenceDialog personId={person.id} licence={acting.licence} onBack={done} />
       ) : null}
     </section>
   )

@@ -48,6 +48,28 @@ export function useEnterLicence(id: string) {
   })
 }
 
+export function useCorrectLicence(id: string, licenceId: string) {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (body: BodyOf<typeof contracts.correctLicence>) =>
+      api(contracts.correctLicence, { params: { id, licenceId }, body }),
+    onSuccess,
+  })
+}
+
+export function useEndLicence(id: string) {
+  const onSuccess = useRefresh()
+  return useMutation({
+    mutationFn: (given: { licenceId: string; body: BodyOf<typeof contracts.endLicence>; key: string }) =>
+      api(contracts.endLicence, {
+        params: { id, licenceId: given.licenceId },
+        body: given.body,
+        key: given.key,
+      }),
+    onSuccess,
+  })
+}
+
 export function useVoidLicence(id: string) {
   const onSuccess = useRefresh()
   return useMutation({

@@ -17,6 +17,7 @@ import { DataTable } from '../../ui/data-table.tsx'
 import { Filters } from '../../ui/filters.tsx'
 import { ListSheet } from '../../ui/list-sheet.tsx'
 import { Tag } from '../../ui/tag.tsx'
+import { LicenceNoticeLine } from '../licences/index.ts'
 import { peopleListQuery } from './queries.ts'
 import type { PeopleQuery } from './queries.ts'
 
@@ -44,7 +45,23 @@ function columnsOf(zone: string): TableColumn<PersonRow>[] {
       heading: peopleWords.roles,
       cell: (row) => row.roles.map((role) => roleTitles[role]).join(', '),
     },
-    { id: 'licence', heading: peopleWords.licence, cell: (row) => licenceSummaries[row.licenceState] },
+    {
+      id: 'licence',
+      heading: peopleWords.licence,
+      cell: ({ licenceState, licenceNotice, signingLockedUntil }) => (
+        <>
+          {licenceSummaries[licenceState]}
+          {licenceNotice ? (
+            <LicenceNoticeLine licence={{ ...licenceNotice, warning: licenceNotice }} />
+          ) : null}
+          {signingLockedUntil === null ? null : (
+            <span className="t-note block">
+              {peopleWords.signingLockedShort({ until: sayInstant(signingLockedUntil, zone) })}
+            </span>
+          )}
+        </>
+      ),
+    },
     {
       id: 'lastSignIn',
       heading: peopleWords.lastSignIn,

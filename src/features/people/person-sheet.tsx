@@ -1,8 +1,10 @@
 import { useState } from 'react'
 import { useQuery } from '@tanstack/react-query'
-import { KeyRound } from 'lucide-react'
+import { KeyRound, LockKeyhole } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { licenceSummaries, peopleWords, roleTitles } from '../../../shared/messages/people.ts'
+import { sayInstant } from '../../../shared/messages/say-date.ts'
+import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { isProblem } from '../../lib/problem-error.ts'
@@ -11,6 +13,7 @@ import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
 import { Button } from '../../ui/button.tsx'
 import { Cartouche } from '../../ui/cartouche.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
+import { Icon } from '../../ui/icon.tsx'
 import { LeaveQuestion } from '../../ui/leave-question.tsx'
 import { Area, Sheet } from '../../ui/sheet.tsx'
 import { CorrectPersonForm } from './correct-person-form.tsx'
@@ -21,6 +24,7 @@ import { personQuery } from './queries.ts'
 
 /** One person: name, roles, account, password, licences. */
 export function PersonSheet({ id }: { id: string }) {
+  const me = useMe()
   const query = useQuery(personQuery(id))
   const [asking, setAsking] = useState<string | null>(null)
   const [loaded, setLoaded] = useState(0)
@@ -44,6 +48,16 @@ export function PersonSheet({ id }: { id: string }) {
         />
         {person ? (
           <div className="pane stack">
+            {person.signingLockedUntil === null ? null : (
+              <p className="row items-start" role="status">
+                <Icon of={LockKeyhole} />
+                <span>
+                  {peopleWords.signingLocked({
+                    until: sayInstant(person.signingLockedUntil, me.facility.zone),
+                  })}
+                </span>
+              </p>
+            )}
             <Button icon={KeyRound} onClick={() => setAsking(newId())}>
               {peopleWords.oneTimeNew}
             </Button>

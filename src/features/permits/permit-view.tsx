@@ -98,7 +98,11 @@ export function PermitView({ permit }: { permit: Permit }) {
         <Papers
           papers={permit.papers}
           mayAttach={permit.may.includes('document.attach')}
-          target={{ contract: attachPermitDocument, number: permit.number, readAgain: permitsKey }}
+          target={{
+            contract: attachPermitDocument,
+            params: { number: permit.number },
+            readAgain: permitsKey,
+          }}
         />
       </section>
       {mayManage && permit.voided === null ? <VoidPermit permit={permit} /> : null}

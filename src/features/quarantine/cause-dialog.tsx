@@ -3,6 +3,7 @@ import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.t
 import { deathFindingWords } from '../../../shared/messages/quarantine-case.ts'
 import { caseForms as words } from '../../../shared/messages/quarantine-forms.ts'
 import { sayDate } from '../../../shared/messages/say-date.ts'
+import { useMay } from '../../lib/may.ts'
 import { newId } from '../../lib/new-id.ts'
 import { useRefusal } from '../../lib/use-refusal.ts'
 import { PasswordField } from '../../ui/password-field.tsx'
@@ -10,6 +11,7 @@ import { SelectField } from '../../ui/select-field.tsx'
 import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { RecordDialog, shortestReason } from '../animals/index.ts'
+import { SignerLines, useSigner } from '../licences/index.ts'
 import { useSignDeathCause } from './mutations.ts'
 
 type Death = CaseDetail['deaths'][number]
@@ -18,6 +20,8 @@ const findings = ['explained-not-transmissible', 'explained-transmissible', 'une
 /** Signs the cause of a death; explained and not transmissible takes its extension away. */
 export function CauseDialog({ number, death, onBack }: { number: string; death: Death; onBack: () => void }) {
   const sign = useSignDeathCause(number, death.eventId)
+  const signer = useSigner()
+  const may = useMay('necropsy.sign')
   const refusal = useRefusal()
   const toast = useToast()
   const [finding, setFinding] = useState<Death['finding'] | null>(null)
@@ -27,10 +31,13 @@ export function CauseDialog({ number, death, onBack }: { number: string; death: 
   const send = async () => {
     if (finding === null) return
     const done = await refusal.attempt(() =>
-      sign.mutateAsync({ key: newId(), body: { finding, cause: cause.trim(), password } }),
+      sign.mutateAsync({
+        key: newId(),
+        body: { finding, cause: cause.trim(), password, licenceId: signer.licenceId },
+      }),
     )
     setPassword('')
-    if (!done) return
+    if (!done) return signer.readAgain()
     toast({ words: words.recorded({ number }) })
     onBack()
   }
@@ -44,9 +51,7 @@ export function CauseDialog({ number, death, onBack }: { number: string; death: 
           ? words.chooseKind
           : cause.trim().length < shortestReason
             ? words.typeWords
-            : password === ''
-              ? words.typePassword
-              : undefined
+            : (signer.shut ?? (password === '' ? words.typePassword : undefined))
       }
       busy={refusal.busy}
       refused={refusal.general([])}
@@ -67,13 +72,18 @@ export function CauseDialog({ number, death, onBack }: { number: string; death: 
         rows={2}
         onChange={({ target }) => setCause(target.value)}
       />
-      <PasswordField
-        label={words.password}
-        hint={words.passwordHint}
-        autoComplete="off"
-        value={password}
-        onChange={({ target }) => setPassword(target.value)}
-      />
+      <div className="signature-who">
+        <SignerLines signer={signer} may={may} />
+      </div>
+      {signer.lockedUntil === null ? (
+        <PasswordField
+          label={words.password}
+          hint={words.passwordHint}
+          autoComplete="off"
+          value={password}
+          onChange={({ target }) => setPassword(target.value)}
+        />
+      ) : null}
     </RecordDialog>
   )
 }

@@ -1,14 +1,10 @@
 import { useState } from 'react'
 import { Link, useNavigate } from 'react-router-dom'
-import type { Me } from '../../../shared/contracts/sign-in.contract.ts'
 import type { CaseDetail } from '../../../shared/contracts/quarantine.contract.ts'
 import { caseWords } from '../../../shared/messages/quarantine-case.ts'
 import { caseForms as words } from '../../../shared/messages/quarantine-forms.ts'
-import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
 import { quarantineWords } from '../../../shared/messages/quarantine-screens.ts'
-import { sayDate } from '../../../shared/messages/say-date.ts'
 import { useMay } from '../../lib/may.ts'
-import { useMe } from '../../lib/me.ts'
 import { newId } from '../../lib/new-id.ts'
 import { paths } from '../../lib/paths.ts'
 import { useLeaveGuard } from '../../lib/use-leave-guard.ts'
@@ -26,6 +22,7 @@ import { TextareaField } from '../../ui/textarea-field.tsx'
 import { useToast } from '../../ui/toast-context.ts'
 import { WrongSummary } from '../../ui/wrong-summary.tsx'
 import { shortestReason } from '../animals/index.ts'
+import { SignerLines, useSigner } from '../licences/index.ts'
 import { clearanceConditions } from './before-clearance.tsx'
 import { sayUnmet } from './clock-sentences.ts'
 import { useClearCase } from './mutations.ts'
@@ -81,7 +78,8 @@ export function ClearanceForm({ of: detail }: { of: CaseDetail }) {
 }
 
 function SignClearance({ of: detail }: { of: CaseDetail }) {
-  const me = useMe()
+  const signer = useSigner()
+  const may = useMay('case.clear')
   const { number } = detail
   const clear = useClearCase(number)
   const refusal = useRefusal()
@@ -94,12 +92,11 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
   const shut =
     against && reason.trim().length < shortestReason
       ? words.typeReason
-      : password === ''
-        ? words.typePassword
-        : undefined
+      : (signer.shut ?? (password === '' ? words.typePassword : undefined))
 
   const send = async () => {
     const body = {
+      licenceId: signer.licenceId,
       password,
       expectedUnmet: detail.unmet.map(({ code }) => code),
       expectedEarliestOn: detail.earliestClearanceOn,
@@ -107,7 +104,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
     }
     const done = await refusal.attempt(() => clear.mutateAsync({ key: newId(), body }))
     setPassword('')
-    if (!done) return
+    if (!done) return signer.readAgain()
     toast({ words: words.clearDone({ number }) })
     letGo()
     await navigate(paths.quarantineCase(number))
@@ -147,7 +144,7 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
           onChange={({ target }) => setReason(target.value)}
         />
       ) : null}
-      <SignatureBlock meaning={words.clearMeaning} who={<Signer me={me} />}>
+      <SignatureBlock meaning={words.clearMeaning} who={<SignerLines signer={signer} may={may} />}>
         <p>
           {words.clearText({
             number,
@@ -158,14 +155,16 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
                 : caseWords.dayOf({ day: detail.dayNumber, length: detail.requiredDays }),
           })}
         </p>
-        <PasswordField
-          label={words.password}
-          hint={words.passwordHint}
-          wrong={refusal.at('/password')}
-          autoComplete="off"
-          value={password}
-          onChange={({ target }) => setPassword(target.value)}
-        />
+        {signer.lockedUntil === null ? (
+          <PasswordField
+            label={words.password}
+            hint={words.passwordHint}
+            wrong={refusal.at('/password')}
+            autoComplete="off"
+            value={password}
+            onChange={({ target }) => setPassword(target.value)}
+          />
+        ) : null}
         <div className="row row-wrap">
           <Button
             type="submit"
@@ -180,24 +179,5 @@ function SignClearance({ of: detail }: { of: CaseDetail }) {
       </SignatureBlock>
       <LeaveQuestion blocker={blocker} />
     </form>
-  )
-}
-
-/** Who signs, with the licence that the signature will show. */
-function Signer({ me }: { me: Me }) {
-  const licence = me.licences.find(({ validToday }) => validToday)
-  return (
-    <>
-      <b>{me.printedName}</b>
-      {licence ? (
-        <span className="block">
-          {orderViewWords.licence({
-            jurisdiction: licence.jurisdiction,
-            number: licence.number,
-            until: sayDate(licence.validUntil),
-          })}
-        </span>
-      ) : null}
-    </>
   )
 }

@@ -46,6 +46,8 @@ const addresses: Record<TodayWork['kind'], (told: Params) => string> = {
   'permit-marks': (told) => paths.permit(told('number')),
   'permit-runs-out': (told) => paths.permit(told('number')),
   'account-without-licence': toPerson,
+  'licence-ends': toPerson,
+  'signing-locked': toPerson,
   'account-without-sign-in': toPerson,
   'setting-proposed': () => paths.facility(),
   'settings-default': () => paths.facility(),

@@ -19,6 +19,7 @@ const ilse: Me = {
   mustChangePassword: false,
   licences: [],
   mayPractise: false,
+  signingLockedUntil: null,
   preferences: {},
   facility: { name: 'Harrow Point Sea Hall', zone: 'America/Halifax', gallon: null, demo: false },
 }

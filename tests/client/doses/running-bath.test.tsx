@@ -18,6 +18,7 @@ const me: Me = {
   mustChangePassword: false,
   licences: [],
   mayPractise: false,
+  signingLockedUntil: null,
   preferences: {},
   facility: { name: 'Harrow Point Sea Hall', zone, gallon: null, demo: false },
 }

@@ -20,6 +20,7 @@ const me: Me = {
   mustChangePassword: false,
   licences: [],
   mayPractise: true,
+  signingLockedUntil: null,
   preferences: {},
   facility: { name: 'Harrow Point Sea Hall', zone, gallon: null, demo: false },
 }

@@ -9,6 +9,7 @@ export function signedBlock(state: SignatureBlock['state']): SignatureBlock {
     printedName: 'Dr Ilse Marrow',
     role: 'veterinarian',
     licence: { jurisdiction: 'Harrow County', number: 'VL-20417', validUntil: '2026-09-30' },
+    registration: null,
     meaning: 'author of this clearance',
     signedAt: '2026-05-14T18:24:07.000Z',
     signedOn: '2026-05-14',

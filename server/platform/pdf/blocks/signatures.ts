@@ -60,6 +60,7 @@ function signatureText(entry: SignatureEntry): Span[] {
     { text: entry.name, bold: true },
     { text: `, ${entry.role}` },
     ...(licence ? [{ text: `\n${licence}` }] : []),
+    ...(entry.registration === undefined ? [] : [{ text: `\n${entry.registration}` }]),
     { text: `\n${entry.meaning}, ${entry.signedAt}\n` },
     {
       text: entry.checkWords,

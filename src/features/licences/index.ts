@@ -1,0 +1,6 @@
+export { LicenceFacts } from './licence-facts.tsx'
+export { LicenceNoticeLine } from './licence-notice-line.tsx'
+export { OwnLicences } from './own-licences.tsx'
+export { SignerLines } from './signer-lines.tsx'
+export { useSigner } from './use-signer.ts'
+export type { Signer } from './use-signer.ts'
