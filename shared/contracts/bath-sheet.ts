@@ -139,6 +139,14 @@ export const BathSheet = z.object({
   lotChanged: z.boolean().describe('That lot is not the one of the first calculation, which is made again'),
   targetText: z.string().describe('Signed target with its basis'),
   contactMinutes: z.number().nullable().describe('Contact time in minutes; null: left in the water'),
+  reentry: z
+    .object({
+      place: z.string().describe('Enclosure, in words'),
+      until: Instant.describe('Nobody stays there without protection before it'),
+    })
+    .nullable()
+    .describe('Formalin went in, in a room that nobody called aired; null when nothing is waited for')
+    .optional(),
   stopIf: z.string().describe('When the bath is stopped at once'),
   instructions: z.string().describe('How it is given'),
   blind: z.boolean().describe('Amounts are left out: for the person who calculates a second time'),
@@ -199,7 +207,12 @@ export const BathSheet = z.object({
         text: z.string().describe('What has to be true before the first gram'),
         level: z.enum(['stop', 'warning', 'note']).describe('How grave it is while it is not met'),
         state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands now'),
-        help: z.string().nullable().describe('What was found'),
+        help: z.string().nullable().describe('What was found by the limits that were signed'),
+        changed: z
+          .array(z.string())
+          .describe(
+            'Limits that the facility changed since the signature, and what only those in force find',
+          ),
         resolve: z.array(z.string()).describe('What would resolve it'),
         place: z
           .enum(['readings', 'volume', 'water', 'animals', 'lot', 'second-calculation'])

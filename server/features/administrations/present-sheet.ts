@@ -1,3 +1,6 @@
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
+import { resolveParameters } from '../../../shared/domain/cautions/resolve-parameters.ts'
+import { reentry as reentryRule } from '../../../shared/domain/cautions/rules/r40-reentry.ts'
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sayTreated } from '../orders/index.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
@@ -21,8 +24,8 @@ import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, isOtherLot, needsSecond, obstacles } from './judge-dose.ts'
-import { placesToResolve } from './places-to-resolve.ts'
 import { presentRecord, storedText } from './present-record.ts'
+import { presentSteps } from './present-steps.ts'
 import { runningBaths } from './running-baths.ts'
 import { saidRounding } from './said-rounding.ts'
 import { aloneOf, firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
@@ -142,63 +145,6 @@ function presentCalendar(
   }))
 }
 
-function presentSteps(
-  situation: DoseSituation,
-  calculations: Calculations,
-  zone: string,
-): BathSheet['steps'] {
-  const found = situation.answer?.cautions ?? []
-  const agreed = secondStands(calculations)
-  return situation.content.conditions.map((condition) => {
-    const fired = found.filter((one) => one.ruleId === condition.ruleId)
-    const { ruleId, level, text } = condition
-    if (condition.secondCalculation)
-      return {
-        ruleId,
-        level,
-        text,
-        state: agreed ? ('met' as const) : ('unmet' as const),
-        help: null,
-        resolve: [],
-        place: 'second-calculation' as const,
-        overridden: false,
-      }
-    if (fired.length === 0)
-      return {
-        ruleId,
-        level,
-        text,
-        state: 'met' as const,
-        help: null,
-        resolve: [],
-        place: null,
-        overridden: false,
-      }
-    // a rule may find several things: whoever resolves one of them knows of the other
-    const said = fired.map((one) => sayCaution(one, zone))
-    return {
-      ruleId,
-      level,
-      text,
-      state: fired.every((one) => one.unknownFacts.length > 0) ? ('unknown' as const) : ('unmet' as const),
-      help: [...new Set(said.map(({ text: words }) => words))].join(' '),
-      resolve: [...new Set(said.flatMap(({ resolves }) => resolves))],
-      overridden: isAnswered(
-        situation,
-        fired.filter((one) => one.level === 'stop'),
-      ),
-      place:
-        fired
-          .flatMap((one) => one.resolvedBy.map((code) => placesToResolve[code]))
-          .find((place) => place !== undefined) ?? null,
-    }
-  })
-}
-
-/** Whether every one of some stops was answered with a signed reason. */
-const isAnswered = (situation: DoseSituation, stops: readonly Caution[]) =>
-  stops.length > 0 && stops.every((one) => answeredStop(situation, one) !== null)
-
 /** A caution with who overrode it, and what an override of it would have to name. */
 function presentCaution(
   situation: DoseSituation,
@@ -295,6 +241,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     lotChanged: !hideLot && isOtherLot(situation, calculations),
     targetText: isSound ? `${content.targetText} ${content.basisText}`.trim() : '',
     contactMinutes: situation.readable && course.timed ? fields.contactMinutes : null,
+    reentry: reentryOf(situation, now),
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,
@@ -333,6 +280,19 @@ export function presentSheet(request: SheetRequest): BathSheet {
     running: runningBaths(records),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
+}
+
+/** Until when nobody stays where formalin went in, unless the order says that the room is aired; null once it is over. */
+function reentryOf({ content, records, settings }: DoseSituation, now: string): BathSheet['reentry'] {
+  const { fields, enclosure } = content
+  const last = records.filter(wentIn).at(-1)
+  if (content.product.agent !== 'formalin' || !last || fields.setting === 'pond') return null
+  if (fields.stated.isAired === true) return null
+  const minutes = resolveParameters(reentryRule, settings).find(({ key }) => key === 'reentryMinutes')?.value
+  const until = last.happened_at.getTime() + (minutes ?? 0) * 60_000
+  return until <= Date.parse(now)
+    ? null
+    : { place: `${enclosure.code} ${enclosure.name}`.trim(), until: new Date(until).toISOString() }
 }
 
 /** The animals as signed, each that is not in the water any more marked so. */
