@@ -34,6 +34,7 @@ import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
 import { WeakAndHandled1764600000053 } from './0053-weak-and-handled.ts'
 import { LicencesAndSigningLocks1764600000055 } from './0055-licences-and-signing-locks.ts'
 import { RuleParameters1764600000059 } from './0059-rule-parameters.ts'
+import { FoodOrRelease1764600000062 } from './0062-food-or-release.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -74,4 +75,5 @@ export const migrations = [
   WeakAndHandled1764600000053,
   LicencesAndSigningLocks1764600000055,
   RuleParameters1764600000059,
+  FoodOrRelease1764600000062,
 ]
