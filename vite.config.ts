@@ -74,8 +74,16 @@ const benchInPieces: Plugin = {
   },
 }
 
-/** Those of a group that people use every week, or its others. */
-const pieceOf = ({ group, weekly }: AnyCalculator) => `${group}-${weekly ? 'weekly' : 'more'}`
+/** A piece of more would be more than a sheet may load. */
+const mostInPiece = 5
+
+/** Those of a group that people use every week, or its others, a few at a time. */
+function pieceOf(of: AnyCalculator): string {
+  const alike = calculators.filter(({ group, weekly }) => group === of.group && !weekly === !of.weekly)
+  const pieces = Math.ceil(alike.length / mostInPiece)
+  const at = Math.floor((alike.indexOf(of) * pieces) / alike.length)
+  return `${of.group}-${of.weekly ? 'weekly' : 'more'}${at === 0 ? '' : `-${String(at + 1)}`}`
+}
 
 /** The file that describes a calculator, and what it is called there. */
 function calculatorFile(id: string): { name: string; file: string } {
