@@ -94,8 +94,6 @@ export function compose(outside: Outside) {
     animals,
   }
   const permits = createPermits(register)
-  const acquisitions = createAcquisitions({ ...register, permits: permits.service })
-  const exports = createExports({ ...register, acquisitions })
   const orders = createOrders({
     ...parts,
     facility: facility.service,
@@ -108,6 +106,12 @@ export function compose(outside: Outside) {
     publicUrl: outside.publicUrl ?? '',
     treatments: quarantine.services.treatments,
   })
+  const acquisitions = createAcquisitions({
+    ...register,
+    permits: permits.service,
+    withdrawalHold: orders.withdrawalHold,
+  })
+  const exports = createExports({ ...register, acquisitions })
   const audit = createAudit({ ...parts, blindAmong: orders.queries.blindAmong })
   const administrations = createAdministrations({
     ...parts,

@@ -33,6 +33,7 @@ import { StandingLockLifts1764600000051 } from './0051-standing-lock-lifts.ts'
 import { LiftsOneByOne1764600000052 } from './0052-lifts-one-by-one.ts'
 import { WeakAndHandled1764600000053 } from './0053-weak-and-handled.ts'
 import { RuleParameters1764600000059 } from './0059-rule-parameters.ts'
+import { FoodOrRelease1764600000062 } from './0062-food-or-release.ts'
 
 /** Every migration in order. One that has landed is never edited: add another. */
 export const migrations = [
@@ -72,4 +73,5 @@ export const migrations = [
   LiftsOneByOne1764600000052,
   WeakAndHandled1764600000053,
   RuleParameters1764600000059,
+  FoodOrRelease1764600000062,
 ]

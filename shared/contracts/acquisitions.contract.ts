@@ -205,6 +205,8 @@ export const recordDisposition = contract({
     'name-already-used',
     'count-too-small',
     'movement-locked',
+    'withdrawal-not-over',
+    'food-or-release-not-said',
   ],
   idempotent: 'by-record-id',
 })

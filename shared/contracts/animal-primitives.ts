@@ -9,6 +9,7 @@ import {
   lifeStages,
   sexes,
 } from '../domain/animals/description.ts'
+import { foodAnswers } from '../domain/animals/food-or-release.ts'
 import { quarantineKindNames, taxonGroupNames } from '../domain/taxa/taxon-group.ts'
 import { Instant, LocalDate, PartialDate, RecordId } from './primitives.ts'
 
@@ -21,6 +22,7 @@ export const AnimalFormName = z.enum(animalForms).describe('An individual, or a 
 export const SexName = z.enum(sexes).describe('Sex')
 export const StageName = z.enum(lifeStages).describe('Stage of life')
 export const IdentifierKindName = z.enum(identifierKinds).describe('Kind of mark')
+export const FoodAnswerName = z.enum(foodAnswers).describe('Yes: it may be eaten or set free; no: never')
 export const DeathKindName = z.enum(deathKinds).describe('How the death came to be known')
 export const CarcassStateName = z.enum(carcassStates).describe('State of the body when it was found')
 export const CarcassPlaceName = z.enum(carcassPlaces).describe('What became of the body')

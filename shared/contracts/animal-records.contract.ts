@@ -6,6 +6,7 @@ import {
   CarcassPlaceName,
   CarcassStateName,
   DeathKindName,
+  FoodAnswerName,
   HappenedAt,
   IdentifierKindName,
   Note,
@@ -289,6 +290,24 @@ export const describeAnimal = contract({
   }),
   reply: { 200: Animal },
   problems: ['not-found', 'stale-version', 'in-the-future'],
+})
+
+export const sayFoodOrRelease = contract({
+  id: 'sayFoodOrRelease',
+  method: 'post',
+  path: '/animals/:accession/food-or-release',
+  action: 'animal.say-food-or-release',
+  summary: 'Say whether an animal or group may ever be eaten or set free',
+  params: animalParams,
+  body: z.strictObject({
+    id: RecordId,
+    answer: FoodAnswerName,
+    reason: Reason,
+    happenedAt: HappenedAt,
+  }),
+  reply: { 201: Animal },
+  problems: ['not-found', 'in-the-future', 'id-already-used'],
+  idempotent: 'by-record-id',
 })
 
 export const addIdentifier = contract({

@@ -8,6 +8,7 @@ import {
   CarcassStateName,
   Count,
   DeathKindName,
+  FoodAnswerName,
   IdentifierKindName,
   KnownOn,
   NewestWeight,
@@ -20,7 +21,7 @@ import {
   TaxonGroupName,
 } from './animal-primitives.ts'
 import { contract } from './contract.ts'
-import { Instant, listQuery, May, page, RecordId } from './primitives.ts'
+import { Instant, listQuery, LocalDate, May, page, RecordId } from './primitives.ts'
 import { Sensitivity, WeightBand } from './taxa.contract.ts'
 
 const LockState = z
@@ -93,6 +94,18 @@ export const Animal = AnimalRow.extend({
   splitInto: z.array(AccessionNumber).describe('Groups and individuals taken from it'),
   arrivedAt: Instant.nullable().describe('First moment in the house'),
   arrivedKnownOn: KnownOn,
+  foodOrRelease: z
+    .object({
+      answer: FoodAnswerName,
+      accession: AccessionNumber.describe(
+        'Of whom it was said: itself, or a group it came from or that joined it',
+      ),
+      reason: z.string().describe('Why'),
+      happenedOn: LocalDate.describe('Since when'),
+      recordedBy: z.string().describe('Who said it'),
+    })
+    .nullable()
+    .describe('Whether it may be eaten or set free; null while nobody said'),
   identifiers: z.array(AnimalIdentifier).describe('Every mark it ever had'),
   locks: z
     .array(

@@ -139,6 +139,14 @@ export const BathSheet = z.object({
   lotChanged: z.boolean().describe('That lot is not the one of the first calculation, which is made again'),
   targetText: z.string().describe('Signed target with its basis'),
   contactMinutes: z.number().nullable().describe('Contact time in minutes; null: left in the water'),
+  reentry: z
+    .object({
+      place: z.string().describe('Enclosure, in words'),
+      until: Instant.describe('Nobody stays there without protection before it'),
+    })
+    .nullable()
+    .describe('Formalin went in, in a room that nobody called aired; null when nothing is waited for')
+    .optional(),
   stopIf: z.string().describe('When the bath is stopped at once'),
   instructions: z.string().describe('How it is given'),
   blind: z.boolean().describe('Amounts are left out: for the person who calculates a second time'),

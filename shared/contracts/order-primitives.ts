@@ -20,6 +20,7 @@ export const Stated = z
     hasPlantsOrAlgae: z.boolean().nullable().describe('Plants or algae are on show in this water'),
     lights: z.enum(['full', 'dimmed', 'off']).nullable().describe('Lights over the water'),
     isBuffered: z.boolean().nullable().optional().describe('Bicarbonate goes into the bath with tricaine'),
+    isAired: z.boolean().nullable().optional().describe('Out of doors, or in a room whose air is changed'),
     hasBiofilter: z
       .boolean()
       .nullable()

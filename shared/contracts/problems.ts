@@ -58,6 +58,8 @@ export const problemStatus = {
   'contradicts-another-move': 409,
   'enclosure-not-in-use': 409,
   'movement-locked': 409,
+  'withdrawal-not-over': 409,
+  'food-or-release-not-said': 409,
   'documented-transfer-needed': 403,
   'part-of-another-record': 409,
   'not-a-group': 409,

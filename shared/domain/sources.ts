@@ -40,6 +40,18 @@ export const sources = {
     citation: '21 CFR 529.2503, tricaine methanesulfonate; read in the 2015 edition',
     mark: 'V',
   },
+  'cfr-1910-1048': {
+    citation: '29 CFR 1910.1048, formaldehyde at work; read in the text of November 2024',
+    mark: 'V',
+  },
+  'bunting-2009': {
+    citation: 'Bunting et al. 2009, Journal of Zoo and Wildlife Medicine 40(3): itraconazole in penguins',
+    mark: 'V',
+  },
+  'cfr-530-41': {
+    citation: '21 CFR 530.41, drugs prohibited for extralabel use in food animals; read in the 2015 edition',
+    mark: 'V',
+  },
   'ufifas-vm77': { citation: 'UF/IFAS Extension VM-77, Francis-Floyd and Pouder: formalin', mark: 'V' },
   'ufifas-vm86': { citation: 'UF/IFAS Extension VM-86, Francis-Floyd: salt', mark: 'V' },
   'ufifas-fa008': {

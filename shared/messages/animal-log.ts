@@ -30,6 +30,8 @@ export const animalLogWords = defineMessages({
   statedEstimate: (p: { low: number; high: number }) => `Estimated: ${String(p.low)} to ${animals(p.high)}.`,
   described: (p: { taxon: string; name: string; sex: string; stage: string; reason: string }) =>
     `Described as ${p.taxon}${p.name ? `, ${p.name}` : ''}, ${p.sex}, ${p.stage}${because(p.reason)}.`,
+  mayBeFood: (p: { reason: string }) => `May be eaten or set free${because(p.reason)}.`,
+  neverFood: (p: { reason: string }) => `Never eaten and never set free${because(p.reason)}.`,
   marked: (p: { mark: string; value: string; place: string }) =>
     `Mark recorded: ${p.mark} ${p.value}${p.place ? `, ${p.place}` : ''}.`,
   markEnded: (p: { mark: string; value: string; reason: string }) =>
@@ -57,6 +59,7 @@ export const discrepancyNames = defineMessages({
   'dosed-in-absence': 'a dose recorded while it was not in that water.',
   'dose-under-broken-order': 'a dose recorded under an order that is not what was signed.',
   'end-before-dose': 'an end of a bath recorded for a time before it began.',
+  'left-before-withdrawal': 'left before its wait after a dose was over.',
   'died-elsewhere': 'found dead where it was not.',
 } satisfies Record<DiscrepancyKind, string>)
 
@@ -104,6 +107,8 @@ export const discrepancySentences = defineMessages({
     `Dose ${p.said('key')} of ${p.said('order')}: ${p.said('given')} was recorded as given, and the signed order cannot be relied on: its text, or what is stored beside it, is not what was signed. Find out what was meant and what the animals were given.`,
   'end-before-dose': (p) =>
     `Dose ${p.said('key')} of ${p.said('order')}: an end was recorded for a time before the dose went in. It ends nothing. Find out when the animals were in the bath, and have the real end recorded.`,
+  'left-before-withdrawal': (p) =>
+    `Left (${p.said('cause')}) before ${p.said('until')}, until when it had to wait after ${p.said('drug')} of ${p.said('order')}. Find out whether it may have been eaten, and tell whoever has it.`,
   'died-elsewhere': (p) =>
     p.said('place') === ''
       ? `${p.said('seen')} found dead in ${p.said('enclosure')}; by the register it was in no enclosure of the house then. A move was not recorded, or the number is another animal’s.`

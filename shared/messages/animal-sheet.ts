@@ -49,6 +49,12 @@ export const animalWords = defineMessages({
   bornUnknown: 'not known',
   arrived: 'Came',
   enclosure: 'Enclosure',
+  food: 'Food or release',
+  foodYes: 'May be eaten or set free',
+  foodNo: 'Never eaten and never set free',
+  foodNotSaid: 'Nobody said',
+  foodBy: (p: { by: string; on: string; reason: string; of: string }) =>
+    `${p.by}, ${p.on}${p.of ? `, of ${p.of}` : ''}: ${p.reason}`,
   marks: 'Marks',
   noMarks: 'none recorded',
   markEnded: (p: { mark: string; on: string; reason: string }) => `${p.mark}, until ${p.on}: ${p.reason}`,

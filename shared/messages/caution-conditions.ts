@@ -4,6 +4,7 @@ import { counted, defineMessages } from './define-messages.ts'
 interface ConditionParams {
   floor: string
   maxAgeMinutes: number
+  minutes: number
   maxAgeHours: number
   limit: string
   tests: string
@@ -25,5 +26,7 @@ export const cautionConditions = defineMessages({
   R31: (p) => `Water tested: ${p.tests}`,
   R34: () => 'Lot neither expired, recalled nor set aside',
   R39: () => 'Second calculation by another person, blind, where it is due',
+  R40: (p) =>
+    `Room aired, or nobody in it without protection for ${counted(p.minutes, 'minute', 'minutes')} after it goes in`,
   R41: (p) => `At most ${p.limitPercent} % of the animals moribund or not eating, none handled within a day`,
 } satisfies Record<StartRuleId, (params: ConditionParams) => string>)

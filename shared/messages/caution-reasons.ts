@@ -22,6 +22,7 @@ export const cautionReasonWords = defineMessages({
   R16: 'A foam fractionator carries the drug out and may overflow.',
   R17: 'Chloroquine is poisonous to algae and some invertebrates, and light breaks it down.',
   R18: 'Tricaine is a strong acid: without a buffer the pH falls far, in sea water too, and the animals are burnt by it.',
+  R19: 'The label of tricaine allows it in food fish of four families only, in water above 10 °C, and not within 21 days of harvest.',
   R22: 'The label of hydrogen peroxide excludes some species and stages; warm water makes it harsher.',
   R23: 'Chloramine-T is more poisonous in acid and soft water.',
   R24: 'In alkaline and hard water permanganate leaves its oxide on the gills, and what is given in a day adds up.',
@@ -35,9 +36,13 @@ export const cautionReasonWords = defineMessages({
   R32: 'An error of the volume is the same error of the dose.',
   R33: 'An error of the weight is the same error of the dose.',
   R34: 'A lot that expired, was recalled or was set aside is not what its label says.',
+  R37: 'The law forbids nitroimidazoles and fluoroquinolones outside the label in animals that may be eaten. An animal that is set free may be eaten too.',
   R39: 'Another person, working from the label and the container, finds a tenfold error, the wrong water and the wrong bottle.',
+  R40: 'Formaldehyde is a carcinogen and a sensitiser, and leaves the water into the air.',
   R41: 'Weak or lately handled animals bear a treatment badly.',
   R42: 'Labels and circulars ask for a trial on a few animals where a species has no experience of the drug.',
+  R43: 'Of 30 samples after itraconazole from bulk powder 26 held none that could be measured.',
+  R44: 'Together they harm kidneys and gut more than either does.',
   R47: 'A figure beyond every published range for the drug is a slip, and not a decision.',
   R48: 'A plan far ahead, long, or blind to earlier doses is decided for animals and water that will be others by then.',
   R49: 'A range holds for the water and the contact time that it was published for.',
@@ -56,5 +61,7 @@ export const orderRouteWords = defineMessages({
 /** What a rule may bring besides its level. */
 export const cautionEffectWords = defineMessages({
   secondCalculation: 'a second calculation by another person',
+  reentry: 'a time before which nobody stays in the room without protection',
+  holdUntil: 'a day before which treated animals are neither eaten nor set free',
   task: 'work to do: ammonia and nitrite tested every 12 hours, less fed, water changed',
 } satisfies Record<CautionEffect['kind'], string>)

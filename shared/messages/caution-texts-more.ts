@@ -7,6 +7,9 @@ export type CautionTexts = { [Code in CautionCode]: (params: Said<CautionParams[
 
 const hours = (count: number) => counted(Math.round(count * 100) / 100, 'hour', 'hours')
 
+/** Where the air is meant. */
+const at = (places: string) => (places === '' ? '' : ` At ${places}.`)
+
 /** Titles of the rules on anaesthesia and on the biofilter. */
 export const moreCautionTitles = {
   'tricaine-unbuffered': 'Tricaine without a buffer',
@@ -22,6 +25,19 @@ export const moreCautionTitles = {
   'nitrogen-rising': 'Ammonia or nitrite is rising',
   'unionised-ammonia-high': 'Un-ionised ammonia is high',
   'unionised-ammonia-unknown': 'Un-ionised ammonia is not known',
+  'food-or-release-unknown': 'Nobody said whether they may be eaten or set free',
+  'food-or-release-not-said': 'Nobody said whether they may be eaten or set free',
+  'prohibited-in-food': 'Forbidden in animals that may be eaten or set free',
+  'tricaine-food-family': 'Tricaine outside the families of its label',
+  'tricaine-food-cold': 'Too cold for tricaine in fish that may be eaten',
+  'tricaine-food-temperature-unknown': 'Temperature for food fish is not known',
+  'tricaine-food-hold': 'Not eaten and not set free for a time',
+  'room-not-aired': 'Formalin in a room that is not aired',
+  'room-air-unknown': 'Nobody said whether the room is aired',
+  'itraconazole-from-bulk': 'Itraconazole from bulk powder',
+  'itraconazole-source-unknown': 'Where this itraconazole comes from is not known',
+  'animal-uses-unknown': 'Other drugs of these animals are not known',
+  'anti-inflammatories-together': 'Anti-inflammatories too close together',
 } satisfies Partial<Record<CautionCode, string>>
 
 /** Their sentences. */
@@ -51,4 +67,30 @@ export const moreCautionTexts = {
     `Un-ionised ammonia nitrogen works out to ${p.value}, above ${p.limit}. Test every 12 hours, feed less and change water.`,
   'unionised-ammonia-unknown': (p) =>
     `Temperature and pH of the day or the salinity are missing, so nobody can say whether un-ionised ammonia nitrogen is at most ${p.limit}.`,
+  'food-or-release-unknown': () =>
+    'Whether the animals may ever be eaten or set free is not known, and it decides whether this drug may be used.',
+  'food-or-release-not-said': (p) =>
+    `Whether an animal may ever be eaten or set free decides whether this drug may be used. Nobody said so of: ${p.animals}.`,
+  'prohibited-in-food': (p) =>
+    `The law forbids this drug outside its label in animals that may be eaten, and nobody can override that. May be eaten or set free: ${p.animals}.`,
+  'tricaine-food-family': (p) =>
+    `The label allows tricaine in food fish of the catfish, salmon, pike and perch families alone. Not of these, or not known to be: ${p.animals}.`,
+  'tricaine-food-cold': (p) =>
+    `The water was at ${p.temperature} within the last hours. The label allows tricaine in food fish above ${p.limit} only.`,
+  'tricaine-food-temperature-unknown': (p) =>
+    `No temperature of the last hours. The label allows tricaine in food fish above ${p.limit} only.`,
+  'tricaine-food-hold': (p) =>
+    `For ${counted(p.days, 'day', 'days')} after the last dose these are neither eaten nor set free: ${p.animals}.`,
+  'room-not-aired': (p) =>
+    `The order says that the room is not aired.${at(p.places)} Given now, nobody stays there without protection until ${p.reentryAt}: ${counted(p.minutes, 'minute', 'minutes')}, or until the air is measured below the action level.`,
+  'room-air-unknown': (p) =>
+    `The order does not say whether the room is aired.${at(p.places)} Given now, nobody stays there without protection until ${p.reentryAt}: ${counted(p.minutes, 'minute', 'minutes')}, or until the air is measured below the action level.`,
+  'itraconazole-from-bulk': () =>
+    'This lot was compounded from bulk powder. Most animals that were given such had none in the blood.',
+  'itraconazole-source-unknown': () =>
+    'Whether this lot was compounded from bulk powder is not recorded. Most animals that were given such had none in the blood.',
+  'animal-uses-unknown': () =>
+    'What else these animals are given is not known, so anti-inflammatories that must not meet can’t be told apart.',
+  'anti-inflammatories-together': (p) =>
+    `Order ${p.orderNumber} gives ${p.agent} to these animals less than ${hours(p.limitHours)} away. Together they harm kidneys and gut.`,
 } satisfies Partial<CautionTexts>

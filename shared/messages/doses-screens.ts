@@ -23,6 +23,9 @@ export const sheetWords = defineMessages({
   planned: 'Was planned',
   dueText: (p: { at: string; from: string; until: string }) => `${p.at}; from ${p.from} until ${p.until}`,
   stopIf: 'Stop the bath if',
+  reentry: 'People and the air of the room',
+  reentryText: (p: { place: string; until: string }) =>
+    `Formalin went in at ${p.place}. Nobody stays there without protection until ${p.until}.`,
   conditions: 'Before the first gram',
   conditionsNote: 'judged now by what is recorded',
   cautions: 'Cautions now',

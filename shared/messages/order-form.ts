@@ -75,6 +75,7 @@ export const orderFormWords = defineMessages({
   hasBloom: 'Heavy bloom of algae',
   hasPlantsOrAlgae: 'Plants or algae on show',
   isBuffered: 'Buffered with bicarbonate',
+  isAired: 'Room aired, or out of doors',
   hasBiofilter: 'Biofilter on this water',
   lights: 'Lights over the water',
   full: 'Full',

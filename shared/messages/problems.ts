@@ -76,6 +76,8 @@ export const problemTitles = defineMessages({
   'not-in-that-enclosure': 'It is not in that enclosure',
   'contradicts-another-move': 'Another recorded move contradicts this',
   'enclosure-not-in-use': 'The enclosure was not in use at that time',
+  'withdrawal-not-over': 'It was treated too lately to leave',
+  'food-or-release-not-said': 'Nobody said whether it may be eaten or set free',
   'movement-locked': 'It is held and may not be moved',
   'documented-transfer-needed': 'It may not leave its quarantine boundary',
   'part-of-another-record': 'This line belongs to another record',

@@ -17,6 +17,10 @@ export const registerSentences = defineMessages({
   afterArrival: 'This date lies after the day on which the animals came.',
   coordinatesInPairs: 'Give both latitude and longitude, or neither.',
   loanOnly: 'Only a loan has a last day.',
+  withdrawalNotOver: (p: { accession: string; drug: string; order: string; until: string }) =>
+    `${p.accession} may be eaten or set free, and was given ${p.drug} under ${p.order}. It waits until ${p.until}; nobody can override that.`,
+  foodNotSaid: (p: { accession: string; drug: string; order: string; until: string }) =>
+    `${p.accession} was given ${p.drug} under ${p.order}. If it may ever be eaten or set free it waits until ${p.until}: say so of it first.`,
   unknownLine: 'This permit is used for a line that is not in the form.',
   lineTwice: 'The same animal or group stands in two lines.',
   notAGroup: 'Animals can be added to a group only.',

@@ -11,12 +11,15 @@ import {
   signDraft,
 } from '../builders/an-order.ts'
 import { aFormalinHouse } from '../builders/a-bath.ts'
+import type { FormalinHouse } from '../builders/a-bath.ts'
 import { startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
 let api: TestApi
+let house: FormalinHouse
 beforeAll(async () => {
   api = await startApi()
+  house = await aFormalinHouse(api)
 })
 afterAll(() => api.stop())
 
@@ -52,6 +55,9 @@ const stated = (given: Partial<BathOrderFields['stated']>) => ({
   waterKind: 'marine' as const,
   ...given,
 })
+
+/** Nobody said so of the animals of these tests; a veterinarian answers for it. */
+const neverEaten = { ruleId: 'R19', reason: 'on show, never eaten' }
 
 describe('a tricaine bath in a tub', () => {
   it('is asked for its buffer, and at the dose for the pH of the tub beside that of the home water', async () => {
@@ -90,7 +96,7 @@ describe('a tricaine bath in a tub', () => {
     const buffered = { ...fields, stated: stated({ isBuffered: true }) }
     expect(await written('R18', buffered)).toEqual([])
 
-    const number = await sign(buffered)
+    const number = await sign(buffered, [neverEaten])
     expect(await atDose('R18', number)).toEqual(['stop tricaine-ph-unknown', 'stop tricaine-home-ph-unknown'])
     await readingsNow(api, home.waterBodyId, { ph: ['8.1', 'pH'] })
     await readingsNow(api, tub.waterBodyId, { ph: ['7.2', 'pH'] })
@@ -135,6 +141,7 @@ describe('a tricaine bath in a tub', () => {
         contactMinutes: 20,
         stated: stated({ isBuffered: true }),
       }),
+      [neverEaten],
     )
     await readingsNow(api, tank.waterBodyId, { ph: ['6.7', 'pH'] })
     expect(await atDose('R18', number)).toEqual(['stop tricaine-acid'])
@@ -180,7 +187,6 @@ describe('methylene blue', () => {
 
 describe('ammonia under formalin', () => {
   it('is read from the ledger of readings: the newest, those before, and its un-ionised part', async () => {
-    const house = await aFormalinHouse(api)
     const bath = await house.tankWithSchool()
     const number = await house.signedBath(bath)
     const unread = ['warning nitrogen-unknown', 'warning nitrogen-unknown']
@@ -209,5 +215,25 @@ describe('ammonia under formalin', () => {
       'warning nitrogen-rising',
       'warning unionised-ammonia-high',
     ])
+  })
+})
+
+describe('formalin in a room', () => {
+  it('says on the sheet until when nobody stays there, unless the order says that it is aired', async () => {
+    const sheetOf = async (number: string) =>
+      (await house.technician.agent.get(house.doseAt(number)).expect(200)).body
+    const bath = await house.tankWithSchool()
+    const number = await house.signedBath(bath)
+    expect(await atDose('R40', number)).toEqual(['warning room-air-unknown'])
+    expect((await sheetOf(number)).reentry).toBeNull()
+    await house.record(number).expect(201)
+    expect((await sheetOf(number)).reentry).toMatchObject({ until: '2026-12-01T18:50:00.000Z' })
+    expect((await sheetOf(number)).reentry.place).toContain(bath.tank.code)
+
+    const other = await house.tankWithSchool()
+    const aired = await house.signedBath(other, { stated: stated({ isAired: true }) })
+    expect(await atDose('R40', aired)).toEqual([])
+    await house.record(aired).expect(201)
+    expect((await sheetOf(aired)).reentry).toBeNull()
   })
 })

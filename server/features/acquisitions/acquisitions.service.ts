@@ -12,6 +12,8 @@ import type { Animals } from '../animals/index.ts'
 import type { CounterpartiesService } from '../counterparties/index.ts'
 import type { FacilityService } from '../facility/index.ts'
 import type { PermitsService } from '../permits/index.ts'
+import { checkResidues } from './check-residues.ts'
+import type { WithdrawalHoldOf } from './check-residues.ts'
 import { checkGiven, forLine } from './check-given.ts'
 import type { AcquisitionGiven, DispositionGiven, Given } from './check-given.ts'
 import type { TransactionLine, TransactionRecord } from './transaction.entity.ts'
@@ -24,6 +26,7 @@ export interface AcquisitionsParts {
   counterparties: CounterpartiesService
   permits: PermitsService
   animals: Pick<Animals, 'service' | 'questions'>
+  withdrawalHold: WithdrawalHoldOf
 }
 
 const subject = (transaction: { id: string; number: string }) => ({
@@ -260,6 +263,9 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
             throw new Problem('not-found', {
               errors: [{ pointer: `/lines/${String(index)}/animalId`, detail: says.noSuchAnimal }],
             })
+          const waits = await forLine(index, () =>
+            checkResidues(parts, tx, { animal, kind: given.kind, on: placed.first, stage: head.stage }),
+          )
           const entryId = parts.ids.next()
           const { postedCount } = await forLine(index, () =>
             animals.service.changeCount(tx, {
@@ -269,6 +275,7 @@ export function createAcquisitionsService(parts: AcquisitionsParts) {
               count: line.count,
               happenedAt: placed.at,
               isFact: head.stage === 'already',
+              waits,
               source: { kind: 'transaction', id: head.id },
             }),
           )

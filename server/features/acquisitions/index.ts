@@ -8,6 +8,7 @@ import type { FacilityService } from '../facility/index.ts'
 import type { PermitsService } from '../permits/index.ts'
 import { acquisitionRoutes } from './acquisitions.routes.ts'
 import type { TransactionQueries } from './acquisitions.routes.ts'
+import type { WithdrawalHoldOf } from './check-residues.ts'
 import { createAcquisitionsService } from './acquisitions.service.ts'
 import { readUnfinishedTransactions } from './papers-missing.reads.ts'
 import { readTransactions } from './transaction-list.reads.ts'
@@ -31,6 +32,7 @@ export function createAcquisitions(
     permits: PermitsService
     animals: Animals
     documents: Documents
+    withdrawalHold: WithdrawalHoldOf
   },
 ) {
   const { dataSource, documents, facility, clock } = parts

@@ -8,6 +8,7 @@ export const placesToResolve: Partial<Record<ResolveCode, BathSheet['steps'][num
   'aerate-and-log': 'water',
   'read-temperature': 'readings',
   'cool-water': 'readings',
+  'warm-water': 'readings',
   'read-alkalinity': 'readings',
   'raise-alkalinity': 'readings',
   'read-copper': 'readings',

@@ -1,3 +1,6 @@
+import { wentIn } from '../../../shared/domain/orders/dose-states.ts'
+import { resolveParameters } from '../../../shared/domain/cautions/resolve-parameters.ts'
+import { reentry as reentryRule } from '../../../shared/domain/cautions/rules/r40-reentry.ts'
 import type { BathSheet, RecordedDose } from '../../../shared/contracts/doses.contract.ts'
 import { sayTreated } from '../orders/index.ts'
 import type { Caution } from '../../../shared/domain/cautions/evaluate-cautions.ts'
@@ -240,6 +243,7 @@ export function presentSheet(request: SheetRequest): BathSheet {
     lotChanged: !hideLot && isOtherLot(situation, calculations),
     targetText: isSound ? `${content.targetText} ${content.basisText}`.trim() : '',
     contactMinutes: situation.readable && course.timed ? fields.contactMinutes : null,
+    reentry: reentryOf(situation, now),
     stopIf: fields.stopIf,
     instructions: fields.instructions,
     blind: hide,
@@ -278,6 +282,19 @@ export function presentSheet(request: SheetRequest): BathSheet {
     running: runningBaths(records),
     may: mayBe.filter((action) => decide(action, actor.roles, factsOfBath(action)).allowed),
   }
+}
+
+/** Until when nobody stays where formalin went in, unless the order says that the room is aired; null once it is over. */
+function reentryOf({ content, records, settings }: DoseSituation, now: string): BathSheet['reentry'] {
+  const { fields, enclosure } = content
+  const last = records.filter(wentIn).at(-1)
+  if (content.product.agent !== 'formalin' || !last || fields.setting === 'pond') return null
+  if (fields.stated.isAired === true) return null
+  const minutes = resolveParameters(reentryRule, settings).find(({ key }) => key === 'reentryMinutes')?.value
+  const until = last.happened_at.getTime() + (minutes ?? 0) * 60_000
+  return until <= Date.parse(now)
+    ? null
+    : { place: `${enclosure.code} ${enclosure.name}`.trim(), until: new Date(until).toISOString() }
 }
 
 /** The animals as signed, each that is not in the water any more marked so. */

@@ -60,6 +60,8 @@ export interface CountChange {
   happenedAt: string
   /** What is recorded has happened: an excess is kept as a discrepancy instead of being refused. */
   isFact: boolean
+  /** It would leave before its wait after a dose is over; refused before by whoever asks, kept when it has happened. */
+  waits?: { until: string; drug: string; order: string } | null
   source: { kind: string; id: string }
 }
 
@@ -311,6 +313,13 @@ export function createAccession(parts: MoveParts & { moves: Moves; identify: Ide
             by: labelsOf(locks),
             reason: given.kind,
           },
+          times,
+        })
+      if (given.waits)
+        await ledgers.openDiscrepancy(tx, animal, {
+          kind: 'left-before-withdrawal',
+          source: given.source,
+          facts: { ...given.waits, cause: given.kind },
           times,
         })
       if (posted.excessCount > 0)

@@ -66,6 +66,10 @@ export function animalRecordRoutes(service: AnimalsService, queries: AnimalQueri
       await service.describeAnimal(context, params.accession, body)
       return animal(params.accession, context.actor)
     }),
+    route(contracts.sayFoodOrRelease, async ({ params, body, context }) => {
+      await service.sayFoodOrRelease(context, params.accession, body)
+      return animal(params.accession, context.actor)
+    }),
     route(contracts.addIdentifier, async ({ params, body, context }) => {
       await service.addIdentifier(context, params.accession, body)
       return animal(params.accession, context.actor)

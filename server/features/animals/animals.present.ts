@@ -28,6 +28,7 @@ import type {
   StruckRow,
   WeightReadRow,
 } from './chart.reads.ts'
+import type { FoodFact } from './food.reads.ts'
 import type { LogReadRow } from './log.reads.ts'
 import type { SensitivityReadRow, TaxonReadRow, WeightBandReadRow } from './taxa.reads.ts'
 
@@ -117,6 +118,7 @@ const sheetActions: readonly Action[] = [
   'animal.move',
   'observation.record',
   'register.manage',
+  'animal.say-food-or-release',
   'chart.read',
   'chart.write',
 ]
@@ -127,6 +129,7 @@ export interface AnimalSheet {
   identifiers: IdentifierReadRow[]
   locks: LockReadRow[]
   discrepancies: DiscrepancyReadRow[]
+  food: FoodFact | undefined
   taxon: TaxonReadRow | undefined
 }
 
@@ -142,6 +145,15 @@ export function presentAnimal(sheet: AnimalSheet, roles: readonly Role[]): Anima
     splitInto: ties.split_into,
     arrivedAt: ties.arrived_at && iso(ties.arrived_at),
     arrivedKnownOn: ties.arrived_known_on,
+    foodOrRelease: sheet.food
+      ? {
+          answer: sheet.food.answer,
+          accession: sheet.food.accession,
+          reason: sheet.food.reason,
+          happenedOn: sheet.food.happenedOn,
+          recordedBy: sheet.food.recordedBy,
+        }
+      : null,
     identifiers: sheet.identifiers.map((one) => ({
       ...presentFact(one),
       kind: one.kind,

@@ -18,6 +18,7 @@ import type { AnimalsFilter } from './animals.reads.ts'
 import * as show from './animals.present.ts'
 import * as chart from './chart.reads.ts'
 import type { DiscrepanciesFilter } from './chart.reads.ts'
+import { readFoodOrRelease } from './food.reads.ts'
 import { readLog } from './log.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 import type { TaxaFilter } from './taxa.reads.ts'
@@ -50,15 +51,19 @@ export function createAnimalQueries(parts: { dataSource: Db; clock: Clock; amoun
     async animal(accession: string, actor: Actor): Promise<Animal> {
       const { roles } = actor
       const row = await rowOf(accession)
-      const [ties, identifiers, locks, discrepancies, taxa] = await Promise.all([
+      const [ties, identifiers, locks, discrepancies, taxa, food] = await Promise.all([
         chart.readAnimalTies(db, row.id),
         chart.readIdentifiers(db, row.id),
         chart.readLocks(db, [row.id], present()),
         chart.readDiscrepancies(db, { animalIds: [row.id] }),
         readTaxa(db, { ids: [row.taxon_id] }),
+        readFoodOrRelease(db, [row.id], present()),
       ])
       const taxon = taxa[0]
-      const whole = show.presentAnimal({ row, ties, identifiers, locks, discrepancies, taxon }, roles)
+      const whole = show.presentAnimal(
+        { row, ties, identifiers, locks, discrepancies, taxon, food: food.get(row.id) },
+        roles,
+      )
       const shown = { ...whole, discrepancies: await amounts.from(whole.discrepancies, actor) }
       return readsClinical(roles) ? shown : withhold.withholdFromAnimal(shown)
     },

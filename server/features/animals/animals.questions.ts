@@ -11,6 +11,7 @@ import { readAnimals } from './animals.reads.ts'
 import type { AnimalReadRow } from './animals.reads.ts'
 import { countOpenDiscrepancies, readDeaths, readDiscrepancies, readLocksFrom } from './chart.reads.ts'
 import { readHandling, readWhereabouts } from './handled.reads.ts'
+import { readFoodOrRelease, readJoined } from './food.reads.ts'
 import { readStaysIn } from './stays.reads.ts'
 import { readTaxa } from './taxa.reads.ts'
 
@@ -97,6 +98,13 @@ export function createAnimalQuestions(parts: { dataSource: Db }) {
     ): Promise<AnimalFacts | null> {
       return (await facts(db, await readAnimals(db, { at, accession })))[0] ?? null
     },
+
+    /** An animal with every group that joined it, or joined those. */
+    joinedBy: (animalId: string, db: Db = parts.dataSource) => readJoined(db, animalId),
+
+    /** Whether these animals may be eaten or set free, as it was known at an instant; nothing where nobody said. */
+    foodOrRelease: (animalIds: readonly string[], at: Date, db: Db = parts.dataSource) =>
+      readFoodOrRelease(db, animalIds, at),
 
     /** Movement locks in force at an instant that some cases or clock events put on. */
     async locksFrom(sourceIds: readonly string[], at: Date, db: Db = parts.dataSource) {

@@ -5,6 +5,7 @@ import type { Afterwards } from './afterwards.ts'
 import { createAccession } from './accession.service.ts'
 import { createCounts } from './counts.service.ts'
 import { createDiscrepancies } from './discrepancies.service.ts'
+import { createFood } from './food.service.ts'
 import { createGroups } from './groups.service.ts'
 import { createIdentify } from './identify.service.ts'
 import { createLedgers } from './ledgers.ts'
@@ -40,6 +41,7 @@ export function createAnimalsService(parts: {
     ...createCounts(withMoves),
     ...createWeights(withMoves),
     ...createDiscrepancies(withLedgers),
+    ...createFood(withMoves),
     moveAnimal,
     strikeMove,
     describeAnimal,

@@ -23,6 +23,7 @@ import { createAnimalQueries } from './animals.queries.ts'
 import { createAnimalQuestions } from './animals.questions.ts'
 import { animalRoutes } from './animals.routes.ts'
 import { createAnimalsService } from './animals.service.ts'
+import { FoodStatementRow } from './food-statement.entity.ts'
 import { taxaRoutes } from './taxa.routes.ts'
 import { Taxon, TaxonSensitivity, TaxonWeightBand } from './taxon.entity.ts'
 
@@ -42,6 +43,7 @@ export const animalEntities = [
   AnimalDescription,
   Identifier,
   IdentifierEnd,
+  FoodStatementRow,
   CountEntryRow,
   CountStatementRow,
   MoveRow,

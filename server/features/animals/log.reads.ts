@@ -61,6 +61,12 @@ const everything = [
     null,
   ),
   line(
+    'food-or-release',
+    'food_statements x WHERE x.animal_id = $1',
+    `'answer', x.answer, 'reason', x.reason`,
+    null,
+  ),
+  line(
     'mark',
     'identifiers x WHERE x.animal_id = $1',
     `'mark', x.kind, 'value', x.value, 'place', x.place, 'twiceReason', x.twice_reason`,

@@ -7,13 +7,15 @@ import type {
 import type { CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import { known, notApplicable, unknown } from '../../../shared/domain/cautions/fact.ts'
 import type { Fact } from '../../../shared/domain/cautions/fact.ts'
+import { namesOf } from '../../../shared/domain/cautions/inhabitants.ts'
+import { systemicAgents } from '../../../shared/domain/formulary/agent.ts'
 import type { AgentCode } from '../../../shared/domain/formulary/agent.ts'
 import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
 import type { LifeSupportKind } from '../../../shared/domain/places/life-support-kind.ts'
 import type { ReadingParameter } from '../../../shared/domain/readings/parameters.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import type { Db } from '../../platform/database/db.ts'
-import type { AnimalFacts } from '../animals/index.ts'
+import type { AnimalFacts, AnimalQuestions } from '../animals/index.ts'
 import type { WaterFacts, WaterQuestions } from '../water/index.ts'
 import { readAgentHistory } from './agent-history.ts'
 import { readExperiencedTaxa } from './agent-history.reads.ts'
@@ -110,6 +112,11 @@ export function createBathFactsReader(parts: BathFactsParts) {
         db,
       )
       const exceptInto = isVessel(water) ? water.enclosureId : null
+      const food = await parts.animals.foodOrRelease(
+        animals.map(({ animalId }) => animalId),
+        at,
+        db,
+      )
       const nitrogen = await readNitrogenFacts(parts.water, water, at, db)
       const homePh =
         agent === 'tricaine'
@@ -131,6 +138,13 @@ export function createBathFactsReader(parts: BathFactsParts) {
           withoutExperience: newTaxa
             ? known([...new Set(newTaxa)], at.toISOString(), 'the doses recorded here')
             : unknown(),
+          foodOrRelease: foodFact(
+            // what is given to the animal itself reaches no other
+            agent !== null && systemicAgents.some((one) => one === agent)
+              ? animals.filter(({ animalId }) => (options.named ?? []).includes(animalId))
+              : animals,
+            food,
+          ),
           weights: notApplicable(),
         },
         volume: { determination: volumeFact(water) },
@@ -146,6 +160,8 @@ export function createBathFactsReader(parts: BathFactsParts) {
         history: {
           ...history,
           reducerInUse: unknown(),
+          // no order gives a drug to the animals themselves yet
+          animalUses: notApplicable(),
         },
       }
       return { base, water, animals }
@@ -155,6 +171,17 @@ export function createBathFactsReader(parts: BathFactsParts) {
 
 const lookFact = <T>(said: { value: T; at: string | null; source: string } | null): Fact<T> =>
   said ? known(said.value, said.at, said.source) : unknown()
+
+/** Which of them may be eaten or set free, and of which nobody said; it stands since the newest statement. */
+function foodFact(
+  animals: readonly AnimalFacts[],
+  food: Awaited<ReturnType<AnimalQuestions['foodOrRelease']>>,
+): CautionFacts['animals']['foodOrRelease'] {
+  const named = (wanted: 'yes' | undefined) =>
+    namesOf(animals.filter(({ animalId }) => food.get(animalId)?.answer === wanted).map(animalInWater))
+  const said = animals.flatMap(({ animalId }) => food.get(animalId)?.recordedAt ?? []).sort()
+  return known({ yes: named('yes'), notSaid: named(undefined) }, said.at(-1) ?? null, 'the animals')
+}
 
 export type BathFactsReader = ReturnType<typeof createBathFactsReader>
 

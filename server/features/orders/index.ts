@@ -27,6 +27,8 @@ import {
 import { readOrderWork } from './order-work.ts'
 import { readSituation } from './order-situation.ts'
 import { createCourseReporter } from './report-course.ts'
+import type { FacilityDate } from '../../../shared/domain/time/instant.ts'
+import { readWithdrawalHold } from './withdrawal-holds.ts'
 import { createOrderQueries } from './orders.queries.ts'
 import { orderRoutes } from './orders.routes.ts'
 import { createOrdersService } from './orders.service.ts'
@@ -119,6 +121,17 @@ export function createOrders(parts: OrdersOutside) {
     /** Orders with something to decide, and the plans of the open ones, for the worklist. */
     work: () => readOrderWork(dataSource, now().toISOString(), signing.signer),
     answerForPrint,
+    /** Whether an animal still waits after a dose before it may be eaten or set free. */
+    withdrawalHold: (asked: { animalId: string; on: FacilityDate; at: Date }, db: Db) =>
+      readWithdrawalHold(
+        {
+          animals: parts.animals.questions,
+          settingsAt: parts.cautions.settingsAt,
+          zone: () => facility.zone(),
+        },
+        asked,
+        db,
+      ),
     routes: orderRoutes({
       service,
       queries,

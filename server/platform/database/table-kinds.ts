@@ -68,6 +68,7 @@ export const tableKinds: Record<string, TableKind> = {
   animals: 'draft',
   animal_descriptions: 'ledger',
   identifiers: 'ledger',
+  food_statements: 'ledger',
   identifier_ends: 'ledger',
   count_entries: 'ledger',
   count_statements: 'ledger',

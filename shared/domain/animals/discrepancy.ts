@@ -10,6 +10,7 @@
  * - `count-differs`       a count made differs from the ledger
  * - `dose-amount-differs` another amount went into its water than was signed and worked out
  * - `dose-of-other-product` a lot of another product was recorded than the one ordered
+ * - `left-before-withdrawal` left while it had to wait after a dose, and may be eaten or set free
  * - `died-elsewhere`      found dead in an enclosure in which it was not by its moves
  * - `dose-under-broken-order` a dose was recorded under an order that is no longer what was signed
  * - `dosed-in-absence`    a dose was recorded for it at a time at which it was not in that water
@@ -28,6 +29,7 @@ export const discrepancyKinds = {
   'dosed-in-absence': 'veterinarian',
   'dose-under-broken-order': 'veterinarian',
   'end-before-dose': 'veterinarian',
+  'left-before-withdrawal': 'veterinarian',
   'died-elsewhere': 'registrar',
 } as const satisfies Record<string, 'registrar' | 'veterinarian'>
 

@@ -96,6 +96,13 @@ export interface CautionParams {
   'tricaine-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
   'tricaine-ph-differs': { reading: CautionQuantity; home: CautionQuantity; limit: CautionQuantity }
   'tricaine-home-ph-unknown': { limit: CautionQuantity; maxAgeHours: number }
+  'food-or-release-unknown': Record<never, never>
+  'food-or-release-not-said': { animals: readonly NamedAnimal[] }
+  'prohibited-in-food': { animals: readonly NamedAnimal[] }
+  'tricaine-food-family': { animals: readonly NamedAnimal[] }
+  'tricaine-food-cold': { temperature: CautionQuantity; limit: CautionQuantity }
+  'tricaine-food-temperature-unknown': { limit: CautionQuantity }
+  'tricaine-food-hold': { animals: readonly NamedAnimal[]; days: number }
   'peroxide-excluded': { animals: readonly NamedAnimal[] }
   'peroxide-walleye': { animals: readonly NamedAnimal[] }
   'peroxide-eggs': { animals: readonly NamedAnimal[]; from: number; to: number }
@@ -159,6 +166,12 @@ export interface CautionParams {
   }
   'unionised-ammonia-high': { value: CautionQuantity; limit: CautionQuantity }
   'unionised-ammonia-unknown': { limit: CautionQuantity }
+  'room-not-aired': { places: readonly string[]; minutes: number; reentryAt: string }
+  'room-air-unknown': { places: readonly string[]; minutes: number; reentryAt: string }
+  'itraconazole-from-bulk': Record<never, never>
+  'itraconazole-source-unknown': Record<never, never>
+  'animal-uses-unknown': Record<never, never>
+  'anti-inflammatories-together': { orderNumber: string; agent: AgentCode; limitHours: number }
   'test-missing': { reading: ReadingName; maxAgeMinutes: number }
   'test-old': { reading: ReadingName; readAt: string; ageMinutes: number; maxAgeMinutes: number }
   'volume-unknown': Record<never, never>
@@ -242,6 +255,8 @@ export type ResolveCode =
   | 'fractionator-off'
   | 'biofilter-off'
   | 'say-whether-biofilter'
+  | 'air-the-room'
+  | 'keep-people-out'
   | 'dim-lights'
   | 'read-water'
   | 'correct-water'
@@ -250,6 +265,9 @@ export type ResolveCode =
   | 'change-water'
   | 'buffer-the-bath'
   | 'say-whether-buffered'
+  | 'say-food-or-release'
+  | 'warm-water'
+  | 'hold-animals'
   | 'test-some-first'
   | 'declare-experience'
   | 'check-figure'

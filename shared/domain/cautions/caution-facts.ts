@@ -6,6 +6,7 @@ import type { TaxonGroup } from '../taxa/taxon-group.ts'
 import type { FacilityDate, Instant, Zone } from '../time/instant.ts'
 import type { ConcentrationBasis } from '../units/basis.ts'
 import type { UnitOf } from '../units/unit-table.ts'
+import type { NamedAnimal } from './caution-param.ts'
 import type { Fact } from './fact.ts'
 
 export type ConcentrationUnit = UnitOf<'massConcentration'> | UnitOf<'volumeConcentration'>
@@ -59,6 +60,12 @@ export interface WeightFact {
   measured: boolean
   /** Whether it lies in the plausible band of its taxon; null where the taxon has none. */
   plausible: boolean | null
+}
+
+/** Which animals may be eaten or set free, and of which nobody said; of the others somebody said that they are not. */
+export interface FoodOrRelease {
+  yes: readonly NamedAnimal[]
+  notSaid: readonly NamedAnimal[]
 }
 
 /** An order or dose of any agent into this water, this one left out. `from` null: no day set yet; `until` null: no end. */
@@ -138,6 +145,8 @@ export interface CautionFacts {
     copperCourse: Fact<'not-started' | 'ramp' | 'hold'>
     /** Bicarbonate goes into the bath with tricaine. */
     isBuffered: Fact<boolean>
+    /** Out of doors, or in a room whose air is changed. */
+    isAired: Fact<boolean>
     spacing: Fact<DoseSpacing>
   }
   water: {
@@ -173,6 +182,8 @@ export interface CautionFacts {
     handledInLast24h: Fact<boolean>
     /** Taxa in the water for which this agent is new here: not used before, no test group, no declared experience. */
     withoutExperience: Fact<readonly string[]>
+    /** Of those who are reached by the agent. */
+    foodOrRelease: Fact<FoodOrRelease>
     /** Newest weights of those who are treated; whoever was never weighed is not among them. */
     weights: Fact<readonly WeightFact[]>
     /** Those who are treated and were never weighed; absent in orders signed before weights were asked for. */
@@ -198,10 +209,14 @@ export interface CautionFacts {
     status: Fact<'usable' | 'recalled' | 'quarantined'>
     /** Kept too cold or frozen, or a white precipitate seen. */
     storageFault: Fact<boolean>
+    /** Compounded from powder that is no approved product. */
+    isFromBulk: Fact<boolean>
     densityGPerMl: Fact<number>
   }
   history: {
     agentUses: Fact<readonly AgentUse[]>
+    /** Other orders that are given to these animals themselves. */
+    animalUses: Fact<readonly AgentUse[]>
     /** Of this agent into this water in the 24 h before, mg/L. */
     givenInLast24hMgPerL: Fact<number>
     reducerInUse: Fact<boolean>

@@ -31,6 +31,7 @@ export const cautionRuleIds = [
   'R16',
   'R17',
   'R18',
+  'R19',
   'R22',
   'R23',
   'R24',
@@ -44,9 +45,13 @@ export const cautionRuleIds = [
   'R32',
   'R33',
   'R34',
+  'R37',
   'R39',
+  'R40',
   'R41',
   'R42',
+  'R43',
+  'R44',
   'R47',
   'R48',
   'R49',
@@ -59,9 +64,25 @@ export type CautionEffect =
   | { kind: 'secondCalculation' }
   /** Ammonia and nitrite are watched, less is fed, water is changed. */
   | { kind: 'task' }
+  /** Animals that are treated are neither eaten nor set free for so many days after the last dose. */
+  | { kind: 'holdUntil'; days: number }
+  /** Nobody stays in the room without protection for so many minutes after the dose. */
+  | { kind: 'reentry'; minutes: number }
 
 /** The rules that are judged only at the start: on an order each is a condition. */
-export const startRuleIds = ['R01', 'R07', 'R14', 'R15', 'R16', 'R30', 'R31', 'R34', 'R39', 'R41'] as const
+export const startRuleIds = [
+  'R01',
+  'R07',
+  'R14',
+  'R15',
+  'R16',
+  'R30',
+  'R31',
+  'R34',
+  'R39',
+  'R40',
+  'R41',
+] as const
 export type StartRuleId = (typeof startRuleIds)[number]
 
 /** Thresholds by name; one name means the same in every rule, so one catalogue words them all. */
@@ -97,6 +118,8 @@ export const ruleParameterKeys = [
   'eggsFromDtu',
   'eggsToDtu',
   'warmC',
+  'coldestC',
+  'withdrawalDays',
   'lowestPh',
   'highestPh',
   'differsPh',
@@ -129,6 +152,7 @@ export const ruleParameterKeys = [
   'amountGrams',
   'amountMillilitres',
   'amountShare',
+  'reentryMinutes',
   'unwellPercent',
   'beyondFactor',
   'sameDayHours',

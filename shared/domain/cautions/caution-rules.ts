@@ -17,6 +17,7 @@ import { ozoneAndUv } from './rules/r15-ozone-and-uv.ts'
 import { foamFractionator } from './rules/r16-foam-fractionator.ts'
 import { chloroquine } from './rules/r17-chloroquine.ts'
 import { tricaine } from './rules/r18-tricaine.ts'
+import { tricaineFood } from './rules/r19-tricaine-food.ts'
 import { peroxideSpecies } from './rules/r22-peroxide-species.ts'
 import { chloramineWater } from './rules/r23-chloramine-water.ts'
 import { permanganate } from './rules/r24-permanganate.ts'
@@ -30,9 +31,13 @@ import { staleReadings } from './rules/r31-stale-readings.ts'
 import { volume } from './rules/r32-volume.ts'
 import { weights } from './rules/r33-weights.ts'
 import { lot } from './rules/r34-lot.ts'
+import { prohibitedFood } from './rules/r37-prohibited-in-food.ts'
 import { secondCalculation } from './rules/r39-second-calculation.ts'
+import { reentry } from './rules/r40-reentry.ts'
 import { weakAnimals } from './rules/r41-weak-animals.ts'
 import { firstUse } from './rules/r42-first-use.ts'
+import { itraconazoleBulk } from './rules/r43-itraconazole-bulk.ts'
+import { antiInflammatories } from './rules/r44-anti-inflammatories.ts'
 import { beyondEveryLine } from './rules/r47-beyond-every-line.ts'
 import { plannedTime } from './rules/r48-planned-time.ts'
 import { lineConditions } from './rules/r49-line-conditions.ts'
@@ -58,6 +63,7 @@ export const cautionRules: readonly CautionRule[] = [
   foamFractionator,
   chloroquine,
   tricaine,
+  tricaineFood,
   peroxideSpecies,
   chloramineWater,
   permanganate,
@@ -71,9 +77,13 @@ export const cautionRules: readonly CautionRule[] = [
   volume,
   weights,
   lot,
+  prohibitedFood,
   secondCalculation,
+  reentry,
   weakAnimals,
   firstUse,
+  itraconazoleBulk,
+  antiInflammatories,
   beyondEveryLine,
   plannedTime,
   lineConditions,

@@ -7,8 +7,12 @@ type SignedFacts = Omit<CautionFacts, 'route'> & Partial<Pick<CautionFacts, 'rou
 /** Facts that orders were signed without before a rule asked for them: nobody said, which is unknown. */
 export const askedLater = [
   'order.isBuffered',
+  'order.isAired',
+  'lot.isFromBulk',
+  'history.animalUses',
   'water.homePh',
   'lifeSupport.biofilter',
+  'animals.foodOrRelease',
   'water.totalAmmoniaNMgPerL',
   'water.nitriteNMgPerL',
   'water.unionisedAmmoniaNMgPerL',

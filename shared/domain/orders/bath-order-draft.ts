@@ -33,6 +33,8 @@ export interface StatedFacts {
   lights: 'full' | 'dimmed' | 'off' | null
   /** Bicarbonate goes into the bath with tricaine; absent in orders written before it was asked for. */
   isBuffered?: boolean | null | undefined
+  /** Out of doors, or in a room whose air is changed; absent in orders written before it was asked for. */
+  isAired?: boolean | null | undefined
   /** A biofilter stands in this water; absent in orders written before it was asked for. */
   hasBiofilter?: boolean | null | undefined
   /** Taxa for which a veterinarian declares earlier experience with the agent here. */

@@ -63,6 +63,8 @@ export function lotFacts(chosen: ChosenProduct, base: Pick<BathFacts, 'at' | 'zo
     beyondUseOn: notApplicable(),
     status: lot ? known(lotStatus(lot.state), null, 'the lot') : unknown(),
     storageFault: storageFault(chosen, base),
+    // no lot is recorded as compounded
+    isFromBulk: notApplicable(),
     densityGPerMl: density?.ok ? known(density.value.value, null, 'the label') : notApplicable(),
   }
 }
@@ -125,6 +127,7 @@ export function orderFacts(
       changedSinceLastCalculation: known(false, null, 'the order'),
       copperCourse: notApplicable(),
       isBuffered: orUnknown(said.isBuffered ?? null, stated),
+      isAired: orUnknown(said.isAired ?? null, stated),
       spacing:
         draft.intervalHours === null && draft.given.doses === 0
           ? notApplicable()

@@ -66,6 +66,7 @@ export function weightOrderFacts(
       changedSinceLastCalculation: known(false, null, order),
       copperCourse: notApplicable(),
       isBuffered: notApplicable(),
+      isAired: notApplicable(),
       spacing:
         draft.intervalHours === null && draft.given.doses === 0
           ? notApplicable()

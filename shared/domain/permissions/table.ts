@@ -102,6 +102,7 @@ export const permissions = {
   'register.read': row('yes', 'yes', 'yes', 'yes', 'no'),
   'register.manage': row('no', 'no', 'no', 'yes', 'no'),
   'taxon.set-sensitivity': row('yes', 'no', 'no', 'no', 'no'),
+  'animal.say-food-or-release': row('yes', 'no', 'no', 'yes', 'no'),
   'animal.move': row(
     'yes',
     'inside-quarantine-boundary',

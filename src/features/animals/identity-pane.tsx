@@ -15,16 +15,18 @@ import { useMay } from '../../lib/may.ts'
 import { paths } from '../../lib/paths.ts'
 import { Button } from '../../ui/button.tsx'
 import { DescribeDialog } from './describe-dialog.tsx'
+import { FoodDialog } from './food-dialog.tsx'
 import { EndMarkDialog, MarkDialog } from './mark-dialogs.tsx'
 
 const birthKinds = () => ({ hatched: words.hatched, born: words.bornKind, propagated: words.propagated })
 
 /** Who an animal is, as the registrar keeps it: description, marks, where it came from. */
 export function IdentityPane({ animal, zone }: { animal: Animal; zone: string }) {
-  const [open, setOpen] = useState<'describe' | 'mark' | null>(null)
+  const [open, setOpen] = useState<'describe' | 'mark' | 'food' | null>(null)
   const [ending, setEnding] = useState<Animal['identifiers'][number] | null>(null)
   const { allowed } = useMay('register.manage')
-  const { birth } = animal
+  const maySayFood = useMay('animal.say-food-or-release').allowed
+  const { birth, foodOrRelease: food } = animal
   const marks = animal.identifiers.filter((mark) => mark.ended === null)
   const former = animal.identifiers.filter((mark) => mark.ended !== null)
   const close = () => setOpen(null)
@@ -62,6 +64,27 @@ export function IdentityPane({ animal, zone }: { animal: Animal; zone: string })
           {animal.arrivedAt
             ? sayDate(animal.arrivedKnownOn ?? facilityDateOf(animal.arrivedAt, zone))
             : words.bornUnknown}
+        </dd>
+        <dt>{words.food}</dt>
+        <dd>
+          <span className="block">
+            {food === null ? words.foodNotSaid : food.answer === 'yes' ? words.foodYes : words.foodNo}
+          </span>
+          {food === null ? null : (
+            <span className="block t-note">
+              {words.foodBy({
+                by: food.recordedBy,
+                on: sayDate(food.happenedOn),
+                reason: food.reason,
+                of: food.accession === animal.accession ? '' : food.accession,
+              })}
+            </span>
+          )}
+          {maySayFood ? (
+            <Button kind="plain" size="small" onClick={() => setOpen('food')}>
+              {animalForms.sayFood}
+            </Button>
+          ) : null}
         </dd>
         <dt>{words.marks}</dt>
         <dd>
@@ -114,6 +137,7 @@ export function IdentityPane({ animal, zone }: { animal: Animal; zone: string })
         </Button>
       ) : null}
       {open === 'describe' ? <DescribeDialog animal={animal} onBack={close} /> : null}
+      {open === 'food' ? <FoodDialog animal={animal} onBack={close} /> : null}
       {open === 'mark' ? <MarkDialog animal={animal} onBack={close} /> : null}
       {ending ? (
         <EndMarkDialog accession={animal.accession} mark={ending} onBack={() => setEnding(null)} />

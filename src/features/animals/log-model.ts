@@ -78,6 +78,10 @@ export function sayLogLine(line: Pick<LogLine, 'kind' | 'facts'>): string {
         stage: named(stageNames, text('stage')),
         reason: text('reason'),
       })
+    case 'food-or-release':
+      return text('answer') === 'yes'
+        ? words.mayBeFood({ reason: text('reason') })
+        : words.neverFood({ reason: text('reason') })
     case 'mark':
       return words.marked({
         mark: named(identifierKindNames, text('mark')),

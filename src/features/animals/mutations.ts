@@ -74,6 +74,12 @@ export const useAddIdentifier = (accession: string) =>
     body,
   }))
 
+export const useSayFoodOrRelease = (accession: string) =>
+  useAnimalMutation(contracts.sayFoodOrRelease, (body: BodyOf<typeof contracts.sayFoodOrRelease>) => ({
+    params: { accession },
+    body,
+  }))
+
 interface Command<B> {
   recordId: string
   key: string

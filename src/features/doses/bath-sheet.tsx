@@ -17,7 +17,7 @@ import { keepRunning, keptRunningQuery, sheetQuery } from './queries.ts'
 import { SecondCalculation } from './second-calculation.tsx'
 import { doseToOpen, othersMayAct, sheetMode, waitsForOthers } from './sheet-model.ts'
 import type { SheetPart } from './sheet-model.ts'
-import { StopCriteria } from './sheet-parts.tsx'
+import { ReentryNote, StopCriteria } from './sheet-parts.tsx'
 import { UnsentActs } from './unsent-acts.tsx'
 import { WholeSheet } from './whole-sheet.tsx'
 
@@ -122,6 +122,7 @@ function BlindSheet({ sheet, zone }: { sheet: BathSheetReply; zone: string }) {
       >
         <UnsentActs number={sheet.number} doseId={null} zone={zone} now={sheet.now} />
         <SecondCalculation sheet={sheet} zone={zone} />
+        <ReentryNote sheet={sheet} zone={zone} />
         <StopCriteria sheet={sheet} />
       </PhoneSheet>
       {holdAt === null ? null : (

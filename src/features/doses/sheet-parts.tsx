@@ -24,6 +24,17 @@ export function StopCriteria({ sheet }: { sheet: BathSheet }) {
   )
 }
 
+/** Until when nobody stays where formalin went in; nothing once it is over. */
+export function ReentryNote({ sheet, zone }: { sheet: BathSheet; zone: string }) {
+  const { reentry } = sheet
+  if (!reentry) return null
+  return (
+    <CautionBlock level="warning" title={words.reentry}>
+      {words.reentryText({ place: reentry.place, until: sayMoment(reentry.until, zone, sheet.now) })}
+    </CautionBlock>
+  )
+}
+
 /** Held, ended or broken: said plainly, by whom, and what one may still do. */
 export function Standing({ sheet, zone }: { sheet: BathSheet; zone: string }) {
   const { standing } = sheet

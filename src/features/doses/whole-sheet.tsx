@@ -26,7 +26,15 @@ import { RunningSteps, RunningTime } from './running-bath.tsx'
 import { OtherBaths } from './other-baths.tsx'
 import { bathOf, lotToOpen, nextAct, openRecord, openSteps, otherBaths, ownBath } from './sheet-model.ts'
 import type { NextAct } from './sheet-model.ts'
-import { Amounts, CautionsNow, SignedOverrides, Standing, StopCriteria, WhatGoesIn } from './sheet-parts.tsx'
+import {
+  Amounts,
+  CautionsNow,
+  ReentryNote,
+  SignedOverrides,
+  Standing,
+  StopCriteria,
+  WhatGoesIn,
+} from './sheet-parts.tsx'
 import { SheetSteps } from './sheet-steps.tsx'
 import { serverOffsetMs } from './timer-model.ts'
 import { UnsentActs } from './unsent-acts.tsx'
@@ -132,6 +140,7 @@ export function WholeSheet({
           </section>
         ) : null}
         {running ? null : <DosePicker sheet={sheet} zone={zone} />}
+        <ReentryNote sheet={sheet} zone={zone} />
         {act === 'done' ? null : <StopCriteria sheet={sheet} />}
         {running && timed ? <RunningSteps sheet={sheet} record={record} bath={timed} zone={zone} /> : null}
         <WhatGoesIn sheet={sheet} zone={zone} />

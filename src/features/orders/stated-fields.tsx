@@ -8,8 +8,9 @@ import type { FieldsProps } from './order-fields.tsx'
 type Stated = FieldsProps['values']['stated']
 const yesOrNo = ['oxygenIsLogged', 'hasBloom', 'hasPlantsOrAlgae'] as const
 /** Asked for one drug alone. */
-const ofAgent: Partial<Record<AgentCode, readonly ('isBuffered' | 'hasBiofilter')[]>> = {
+const ofAgent: Partial<Record<AgentCode, readonly ('isBuffered' | 'hasBiofilter' | 'isAired')[]>> = {
   tricaine: ['isBuffered'],
+  formalin: ['isAired'],
   'methylene-blue': ['hasBiofilter'],
 }
 

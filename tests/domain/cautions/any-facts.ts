@@ -76,6 +76,10 @@ const range = fc.record({
 
 const timed = fc.array(fc.record({ value: figure, at: instant }), { maxLength: 3 })
 
+const named = fc.array(fc.constant({ label: 'HP-0419', commonName: 'trout', enclosureCode: 'QT-3' }), {
+  maxLength: 1,
+})
+
 /** Facts of any order in any state of knowledge. */
 export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
   at: fc.constant(at),
@@ -101,6 +105,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     changedSinceLastCalculation: anyFact(fc.boolean()),
     copperCourse: anyFact(fc.constantFrom('not-started' as const, 'ramp' as const, 'hold' as const)),
     isBuffered: anyFact(fc.boolean()),
+    isAired: anyFact(fc.boolean()),
     spacing: anyFact(
       fc.record({
         intervalHours: fc.constantFrom(0, 6, 24, 48, Number.NaN),
@@ -135,6 +140,7 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     inWater: anyFact(fc.array(animal, { maxLength: 3 })),
     unwellPercent: anyFact(figure),
     handledInLast24h: anyFact(fc.boolean()),
+    foodOrRelease: anyFact(fc.record({ yes: named, notSaid: named })),
     withoutExperience: anyFact(fc.array(fc.constant('Genus species'), { maxLength: 2 })),
     weights: anyFact(fc.array(weight, { maxLength: 3 })),
     neverWeighed: anyFact(fc.array(fc.constant('HP-0002'), { maxLength: 2 })),
@@ -171,10 +177,12 @@ export const anyFacts: fc.Arbitrary<CautionFacts> = fc.record({
     beyondUseOn: anyFact(date),
     status: anyFact(fc.constantFrom('usable' as const, 'recalled' as const, 'quarantined' as const)),
     storageFault: anyFact(fc.boolean()),
+    isFromBulk: anyFact(fc.boolean()),
     densityGPerMl: anyFact(figure),
   }),
   history: fc.record({
     agentUses: anyFact(fc.array(use, { maxLength: 3 })),
+    animalUses: anyFact(fc.array(use, { maxLength: 3 })),
     givenInLast24hMgPerL: anyFact(figure),
     reducerInUse: anyFact(fc.boolean()),
   }),

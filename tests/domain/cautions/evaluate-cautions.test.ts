@@ -186,10 +186,11 @@ describe('the list of rules', () => {
     expect(cautionRules.filter(({ when }) => when === 'start').map(({ id }) => id)).toEqual([...startRuleIds])
     for (const rule of cautionRules) expect(rule.condition !== undefined, rule.id).toBe(rule.when === 'start')
   })
-  it('says which can never be overridden: R08 and R27 of those built (treatments reference, section 4), and R47 of ours', () => {
+  it('says which can never be overridden: R08, R27 and R37 of those built (treatments reference, section 4), and R47 of ours', () => {
     expect(cautionRules.filter(({ overridable }) => !overridable).map(({ id }) => id)).toEqual([
       'R08',
       'R27',
+      'R37',
       'R47',
     ])
   })

@@ -77,6 +77,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       changedSinceLastCalculation: known(false),
       copperCourse: known('not-started'),
       isBuffered: known(true),
+      isAired: known(true),
       spacing: known({
         intervalHours: 24,
         lastGivenAt: null,
@@ -110,6 +111,7 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       unwellPercent: known(0),
       handledInLast24h: known(false),
       withoutExperience: known([]),
+      foodOrRelease: known({ yes: [], notSaid: [] }),
       weights: notApplicable(),
       neverWeighed: notApplicable(),
     },
@@ -138,10 +140,12 @@ export function someFacts(agent: AgentCode, target: DoseTarget, change: Change =
       beyondUseOn: notApplicable(),
       status: known('usable'),
       storageFault: known(false),
+      isFromBulk: known(false),
       densityGPerMl: notApplicable(),
     },
     history: {
       agentUses: known([]),
+      animalUses: known([]),
       givenInLast24hMgPerL: known(0),
       reducerInUse: known(false),
     },
