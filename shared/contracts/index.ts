@@ -7,6 +7,7 @@ import * as audit from './audit.contract.ts'
 import { askUnknownCalculator, benchContracts, listCalculators, printBenchSheet } from './bench.contract.ts'
 import * as benchQuestions from './bench-questions.contract.ts'
 import * as caseEvents from './case-events.contract.ts'
+import * as cautionFirings from './caution-firings.contract.ts'
 import * as cautionRules from './caution-rules.contract.ts'
 import * as clearance from './clearance.contract.ts'
 import * as enclosures from './enclosures.contract.ts'
@@ -48,6 +49,7 @@ const modules = [
   waterMap,
   waterVolumes,
   formulary,
+  cautionFirings,
   cautionRules,
   orders,
   adverseEvents,

@@ -75,6 +75,7 @@ export const permissions = {
   'order.amend': row('valid-licence', 'no', 'no', 'no', 'no'),
   'order.discontinue': row('yes', 'no', 'no', 'no', 'no'),
   'caution.override': row('valid-licence', 'no', 'no', 'no', 'no'),
+  'caution.review': row('yes', 'no', 'no', 'no', 'no'),
   'hold.lift': row('yes', 'no', 'no', 'no', 'no'),
   'bath.stop': row('yes', 'yes', 'yes', 'no', 'no'),
   'order.hold': row('yes', 'yes', 'yes', 'no', 'no'),
