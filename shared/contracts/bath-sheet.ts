@@ -207,7 +207,12 @@ export const BathSheet = z.object({
         text: z.string().describe('What has to be true before the first gram'),
         level: z.enum(['stop', 'warning', 'note']).describe('How grave it is while it is not met'),
         state: z.enum(['met', 'unmet', 'unknown']).describe('How it stands now'),
-        help: z.string().nullable().describe('What was found'),
+        help: z.string().nullable().describe('What was found by the limits that were signed'),
+        changed: z
+          .array(z.string())
+          .describe(
+            'Limits that the facility changed since the signature, and what only those in force find',
+          ),
         resolve: z.array(z.string()).describe('What would resolve it'),
         place: z
           .enum(['readings', 'volume', 'water', 'animals', 'lot', 'second-calculation'])

@@ -9,6 +9,8 @@ export const doseWords = defineMessages({
     `Dose ${p.key} comes before this one and has no record. Record first what became of it: given, withheld or refused.`,
   stillRunning: (p: { key: string; at: string }) =>
     `The bath of dose ${p.key}, begun ${p.at}, has no end. Record first when the animals were out of it or the water was changed.`,
+  limitChanged: (p: { limit: string; name: string }) =>
+    `Since signing the facility has changed this limit to ${p.limit} (${p.name}). Each dose is judged by the limit in force.`,
   meaningOverride: 'override of a stop for this dose',
   overrideUnreadable: 'An override that cannot be read any more',
   findingChanged:

@@ -37,6 +37,9 @@ const nameOf = (key: string) => ruleParameterWords[key as RuleParameterKey]
 const small = (text: string) => text.charAt(0).toLowerCase() + text.slice(1)
 const withoutStop = (text: string) => text.replace(/[.\s]+$/u, '')
 
+/** A threshold by its name inside a sentence. */
+export const sayParameterName = (key: string): string => small(nameOf(key))
+
 /** What a facility loosened of the thresholds that a caution was judged by: a sentence each. */
 export function sayLoosened(settings: readonly ResolvedParameter[]): string[] {
   return settings.flatMap((one) =>

@@ -2,7 +2,11 @@ import type { Browser, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { cautionRules } from '../../shared/domain/cautions/caution-rules.ts'
 import { password } from '../support/api.ts'
+import { aFormalinHouse } from '../builders/a-bath.ts'
+import { putInForce } from '../builders/a-threshold.ts'
+import { readingsNow } from '../builders/an-order.ts'
 import { launchChromium } from '../support/chromium.ts'
+import { textOf } from '../pdf/support/poppler.ts'
 import { deskSize, expectSound, openSignedIn, phoneSize, picture, refusals } from '../support/journey.ts'
 import { startServedApp } from '../support/served-app.ts'
 import type { ServedApp } from '../support/served-app.ts'
@@ -170,7 +174,49 @@ describe('the rules where they are looked for', () => {
     expect(await page.getByRole('button', { name: 'Open every rule' }).isVisible()).toBe(false)
     expect(await page.locator('.bridge').isVisible()).toBe(false)
     await picture(page, 'rules-printed')
-    const paper = await page.pdf({ format: 'A4' })
-    expect(paper.byteLength).toBeGreaterThan(50_000)
+    // whichever way the paper lies: the frame of a wide window scrolls, and paper does not
+    for (const landscape of [false, true]) {
+      const paper = await page.pdf({ format: 'A3', landscape })
+      const text = textOf(paper)
+      for (const { id } of cautionRules) expect(text).toContain(`${id} `)
+      expect(text.replaceAll('\u00a0', ' ')).toContain(
+        'Doses that stay in the water make a strength together',
+      )
+      expect(text).not.toContain('Filters')
+    }
   })
 })
+
+describe('a limit that the facility changed after an order was signed', () => {
+  it.each([desk, phone])('stands on the bath sheet apart from the signed one, at $width px', async (size) => {
+    const rest = await atAnotherTank(size === desk)
+    const page = await open('technician', size, `/orders/${rest}/sheet?dose=1&part=whole`)
+    const step = page.getByRole('listitem').filter({ hasText: /Oxygen at least/ })
+    await step.getByText(/Since signing the facility has changed this limit to/).waitFor()
+    const said = (await step.innerText()).replace(/\s+/g, ' ')
+    expect(said).toContain('Oxygen at least 7 mg/L')
+    expect(said).toContain('changed this limit to 8 mg/L (lowest oxygen)')
+    // 7.4 mg/L would do by the signed limit: what is found is found by the one in force, after the sentence that names it
+    expect(said.indexOf('7.4 mg/L')).toBeGreaterThan(said.indexOf('changed this limit'))
+    await expectSound(page, 'a limit changed since')
+  })
+})
+
+let house: Awaited<ReturnType<typeof aFormalinHouse>> | undefined
+/** A bath signed at 7 mg/L, in water of 7.4 mg/L, where 8 mg/L is in force by now. */
+async function atAnotherTank(isFirst: boolean): Promise<string> {
+  if (isFirst) house = await aFormalinHouse(app)
+  if (!house) throw new Error('no house')
+  await putInForce(app, 'R01', 'oxygenFloorMgPerL', '7')
+  const bath = await house.tankWithSchool()
+  const number = await house.signedBath(bath, { contactMinutes: 30 })
+  await house.freshWater(bath)
+  await readingsNow(
+    app,
+    bath.tank.waterBodyId,
+    { 'dissolved-oxygen': ['7.4', 'mg/L'] },
+    '2026-12-01T18:19:00Z',
+  )
+  await putInForce(app, 'R01', 'oxygenFloorMgPerL', '8')
+  return number
+}

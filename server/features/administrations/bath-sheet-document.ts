@@ -117,7 +117,7 @@ function conditionsBlock({ sheet }: BathPaper): DocumentBlock {
     kind: 'conditions',
     columns: 2,
     items: sheet.steps.map((step) => [
-      { text: step.text },
+      { text: step.changed.length > 0 ? `${step.text}. ${step.changed.join(' ')}` : step.text },
       {
         text: `${states[step.state]}${step.overridden ? bathPaper.overridden : ''}`,
         bold: step.state !== 'met',

@@ -24,8 +24,8 @@ import { comparedWith, compareCalculations } from './compare-calculations.ts'
 import { goneOf } from './dose-situation.ts'
 import type { DoseSituation } from './dose-situation.ts'
 import { answeredStop, isOtherLot, needsSecond, obstacles } from './judge-dose.ts'
-import { placesToResolve } from './places-to-resolve.ts'
 import { presentRecord, storedText } from './present-record.ts'
+import { presentSteps } from './present-steps.ts'
 import { runningBaths } from './running-baths.ts'
 import { saidRounding } from './said-rounding.ts'
 import { aloneOf, firstOf, repeatFrom, secondOf, secondShut, secondStands } from './second-person.ts'
@@ -144,63 +144,6 @@ function presentCalendar(
     state: states[i] ?? 'coming',
   }))
 }
-
-function presentSteps(
-  situation: DoseSituation,
-  calculations: Calculations,
-  zone: string,
-): BathSheet['steps'] {
-  const found = situation.answer?.cautions ?? []
-  const agreed = secondStands(calculations)
-  return situation.content.conditions.map((condition) => {
-    const fired = found.filter((one) => one.ruleId === condition.ruleId)
-    const { ruleId, level, text } = condition
-    if (condition.secondCalculation)
-      return {
-        ruleId,
-        level,
-        text,
-        state: agreed ? ('met' as const) : ('unmet' as const),
-        help: null,
-        resolve: [],
-        place: 'second-calculation' as const,
-        overridden: false,
-      }
-    if (fired.length === 0)
-      return {
-        ruleId,
-        level,
-        text,
-        state: 'met' as const,
-        help: null,
-        resolve: [],
-        place: null,
-        overridden: false,
-      }
-    // a rule may find several things: whoever resolves one of them knows of the other
-    const said = fired.map((one) => sayCaution(one, zone))
-    return {
-      ruleId,
-      level,
-      text,
-      state: fired.every((one) => one.unknownFacts.length > 0) ? ('unknown' as const) : ('unmet' as const),
-      help: [...new Set(said.map(({ text: words }) => words))].join(' '),
-      resolve: [...new Set(said.flatMap(({ resolves }) => resolves))],
-      overridden: isAnswered(
-        situation,
-        fired.filter((one) => one.level === 'stop'),
-      ),
-      place:
-        fired
-          .flatMap((one) => one.resolvedBy.map((code) => placesToResolve[code]))
-          .find((place) => place !== undefined) ?? null,
-    }
-  })
-}
-
-/** Whether every one of some stops was answered with a signed reason. */
-const isAnswered = (situation: DoseSituation, stops: readonly Caution[]) =>
-  stops.length > 0 && stops.every((one) => answeredStop(situation, one) !== null)
 
 /** A caution with who overrode it, and what an override of it would have to name. */
 function presentCaution(

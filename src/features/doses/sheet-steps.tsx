@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import type { BathSheet } from '../../../shared/contracts/doses.contract.ts'
 import { sheetWords as words } from '../../../shared/messages/doses-screens.ts'
 import { orderViewWords } from '../../../shared/messages/orders-screens.ts'
@@ -25,16 +26,31 @@ export function SheetSteps({ sheet, lotId }: { sheet: BathSheet; lotId: string |
         key: step.ruleId,
         state: step.state === 'met' ? 'met' : step.state === 'unknown' ? 'open' : 'unmet',
         what: step.text,
-        known: step.state === 'met' ? undefined : <OpenStep step={step} sheet={sheet} lotId={lotId} />,
+        known: knownOf(step, sheet, lotId),
       }))}
     />
   )
 }
 
+/** What is said below a step: a limit that was changed since, and what is open. */
+function knownOf(step: Step, sheet: BathSheet, lotId: string | null): ReactNode {
+  if (step.state !== 'met') return <OpenStep step={step} sheet={sheet} lotId={lotId} />
+  return step.changed.length > 0 ? <Changed step={step} /> : undefined
+}
+
+/** The step shows the limit that was signed; another one in force stands apart from it. */
+const Changed = ({ step }: { step: Step }) =>
+  step.changed.map((sentence) => (
+    <span key={sentence} className="block">
+      {sentence}
+    </span>
+  ))
+
 function OpenStep({ step, sheet, lotId }: { step: Step; sheet: BathSheet; lotId: string | null }) {
   return (
     <span className="open-step">
       {step.help === null ? null : <span>{step.help}</span>}
+      <Changed step={step} />
       {step.overridden ? (
         <Overridden step={step} sheet={sheet} />
       ) : (

@@ -222,6 +222,7 @@ describe('what the sheet shows once', () => {
     level: 'stop' as const,
     state: 'unknown' as const,
     help: null,
+    changed: [],
     resolve: [],
     place: 'readings' as const,
     overridden: false,
