@@ -160,7 +160,6 @@ export function WholeSheet({
         ) : null}
         <SignedOverrides sheet={sheet} zone={zone} />
         <RecordedDoses sheet={sheet} zone={zone} />
-        <AdverseEvents number={sheet.number} doseKey={sheet.key} zone={zone} />
         {running ? <DosePicker sheet={sheet} zone={zone} /> : null}
         <div className="row row-wrap">
           {sheet.may.includes('dose.record') ? (
@@ -168,6 +167,7 @@ export function WholeSheet({
           ) : null}
           <PrintLink number={sheet.number} doseKey={sheet.key} />
         </div>
+        <AdverseEvents number={sheet.number} doseKey={sheet.key} zone={zone} />
       </PhoneSheet>
       {front?.what === 'hold' ? (
         <HoldDialog number={sheet.number} now={front.now} onBack={() => setFront(null)} />
