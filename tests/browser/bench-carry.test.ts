@@ -146,6 +146,12 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     expect(await part.getByRole('textbox', { name: 'Depth of the water' }).inputValue()).toBe('45')
     expect(await page.getByRole('textbox', { name: /^Note/ }).inputValue()).toMatch(/^From the bench/)
     await expectSound(page, 'a volume from the bench')
+    // nothing was typed here: going back asks nothing
+    await page.goBack()
+    await result(page).waitFor()
+    await page.goForward()
+    await part.waitFor()
+    expect(await part.getByRole('textbox', { name: 'Depth of the water' }).inputValue()).toBe('45')
     // errors that nobody stated are open: the sump, the pipe, the displaced share
     const errors = page.getByRole('textbox', { name: /error/i })
     for (const error of await errors.all()) if ((await error.inputValue()) === '') await error.fill('10')
@@ -174,6 +180,15 @@ describe.each([deskSize, phoneSize])('a result of the bench at $width px', (size
     // 1.025 × 997.05 kg/m³ at 25 °C is the density of sea water of 33.2
     expect(figure).toBe('33.2')
     await expectSound(page, 'a reading from the bench')
+    // nothing was typed here: going back asks nothing
+    await page.goBack()
+    await result(page)
+      .getByText(/^33\.2/)
+      .first()
+      .waitFor()
+    await page.goForward()
+    await salinity.waitFor()
+    expect(await salinity.inputValue()).toBe('33.2')
     await page.getByRole('button', { name: /Record 1\sreading/ }).click()
     await page.getByRole('heading', { name: code, level: 1 }).waitFor()
     const { body } = await (await app.as('keeper')).agent.get(`/api/enclosures/${code}/readings`).expect(200)

@@ -52,7 +52,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
   const [bodyId, setBodyId] = useState(waterBodyId ?? '')
   const [instrument, setInstrument] = useState('')
   const carried = useCarried('reading')
-  const [fields, setFields] = useState<ReadingField[]>(() => {
+  const [start] = useState<ReadingField[]>(() => {
     const known = parametersOf(water.ranges, water.latest)
     const shown = known.length > 0 ? known : usual
     if (!carried) return shown.map((parameter) => fieldFor(parameter))
@@ -60,6 +60,7 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
     const others = shown.filter((one) => one !== parameter).map((one) => fieldFor(one))
     return [withComputed(fieldFor(parameter), value as Quantity, saidNote(said)), ...others]
   })
+  const [fields, setFields] = useState(start)
 
   function fieldFor(parameter: ReadingParameter): ReadingField {
     return emptyField(
@@ -71,7 +72,9 @@ export function ReadingForm({ water }: { water: WaterOfEnclosure }) {
   const change = (field: ReadingField, next: Partial<ReadingField>) =>
     setFields(fields.map((one) => (one === field ? { ...one, ...next } : one)))
   const filled = fields.filter((field) => field.value.trim() !== '')
-  const { blocker, letGo } = useLeaveGuard(filled.length > 0)
+  // what the bench filled in is still there when one goes back to it
+  const typed = filled.filter(({ id, value }) => start.find((one) => one.id === id)?.value !== value)
+  const { blocker, letGo } = useLeaveGuard(typed.length > 0)
   const others = readingParameters.filter(
     (parameter) => !fields.some((field) => field.parameter === parameter),
   )

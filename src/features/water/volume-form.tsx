@@ -64,7 +64,8 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
   const [isolationId, setIsolationId] = useState('')
   const [nextCheckOn, setNextCheckOn] = useState('')
   const carried = useCarried('volume')
-  const [note, setNote] = useState(() => (carried ? noteOfCarried(carried) : ''))
+  const [startNote] = useState(() => (carried ? noteOfCarried(carried) : ''))
+  const [note, setNote] = useState(startNote)
   const [tried, setTried] = useState(false)
   const [start] = useState<VolumeDraft>(() => {
     const empty = emptyDraft(water.bodies, treatmentVessel)
@@ -74,7 +75,8 @@ export function VolumeForm({ water, mayOnlyPropose }: { water: WaterOfEnclosure;
   })
   const [draft, setDraft] = useState(start)
   const { blocker, letGo } = useLeaveGuard(
-    note !== '' || nextCheckOn !== '' || JSON.stringify(draft) !== JSON.stringify(start),
+    // what the bench filled in is still there when one goes back to it
+    note !== startNote || nextCheckOn !== '' || JSON.stringify(draft) !== JSON.stringify(start),
   )
   const lengthUnit = me.preferences['lengthUnit'] || 'm'
   const result = workOut(draft)
