@@ -114,7 +114,7 @@ describe('the formulary', () => {
     const of = (value: string) => ({ strength: { value, unit: 'mg/mL' } })
     const refused = await enter(of('2000')).expect(422)
     expect(refused.body.errors[0]).toMatchObject({ pointer: '/strength', code: 'strength-above-all' })
-    expect(refused.body.detail).toMatch(/cannot be more than 1080 mg\/mL.*Check the number and its unit/)
+    expect(refused.body.detail).toMatch(/cannot be more than 1,080 mg\/mL.*Check the number and its unit/)
     const peroxide = { agent: 'hydrogen-peroxide', density: { value: '1.13', unit: 'g/mL' } }
     await enter({ ...of('1131'), ...peroxide }).expect(422)
     await enter({ ...of('396'), ...peroxide }).expect(201)
