@@ -15,8 +15,8 @@ beforeAll(async () => {
   prazi = await aProduct(api, {})
   fields = bathFields({ enclosureId: tank.id, animalIds: [school.id], productId: prazi.id, lotId: null })
   systemic = await aProduct(api, {
-    agent: 'ketamine',
-    productName: 'Ketamine injection',
+    agent: 'enrofloxacin',
+    productName: 'Enrofloxacin injection',
     form: 'liquid',
     strength: { value: '100', unit: 'mg/mL' },
   })
@@ -25,7 +25,7 @@ afterAll(() => api.stop())
 
 describe('a bath of a drug that is given to the animal itself', () => {
   const said =
-    'Ketamine is given to the animal itself: no dose line in force says how much of it goes into water. Choose a product that is given into water.'
+    'Enrofloxacin is given to the animal itself: no dose line in force says how much of it goes into water. Choose a product that is given into water.'
 
   it('is refused while it is written, when it is kept, and when a draft is changed to it', async () => {
     const { agent } = await api.as('veterinarian')
