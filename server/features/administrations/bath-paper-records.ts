@@ -18,7 +18,7 @@ const pen = { pen: true } as const
 const unitOf = (sheet: BathSheet) => formatDose('1', (sheet.amountNow?.unit ?? 'g') as UnitCode).symbol
 
 /** Whether the page can still be handed to somebody who calculates without sight of the first. */
-const isForSecond = (sheet: BathSheet) => standing(sheet).length === 0 && sheet.second?.agrees !== true
+export const isForSecond = (sheet: BathSheet) => standing(sheet).length === 0 && sheet.second?.agrees !== true
 
 /** Before the second calculation, boxes for the pen; what was calculated already in their place, with no amount. */
 function boxes({ sheet, zone }: Told): DocumentBlock {

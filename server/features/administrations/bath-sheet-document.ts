@@ -22,7 +22,7 @@ import { standingCaution } from '../../platform/pdf/standing-caution.ts'
 import { checkBlock } from '../../platform/pdf/check-block.ts'
 import { signatureEntry } from '../../platform/pdf/signature-entry.ts'
 import type { SignedOrder } from '../orders/index.ts'
-import { bathBlocks, calculationBlocks } from './bath-paper-records.ts'
+import { bathBlocks, calculationBlocks, isForSecond } from './bath-paper-records.ts'
 
 type SheetCaution = BathSheet['cautions'][number]
 
@@ -248,8 +248,8 @@ export function bathSheetDocument(paper: BathPaper): PdfDocumentModel {
           ],
         })),
       ),
-      // a page of its own, without the amount, that can be handed to the second person
-      { kind: 'page-break' },
+      // a page of its own, without the amount, that can be handed to the second person as long as there is to be one
+      ...(isForSecond(sheet) ? [{ kind: 'page-break' } as const] : []),
       { kind: 'group', blocks: calculationBlocks({ sheet, zone: block.zone }) },
       { kind: 'group', blocks: bathBlocks({ sheet, zone: block.zone }) },
       {
