@@ -31,7 +31,7 @@ export function isAsked(when: When | undefined, body: unknown): boolean {
  * @param body anything at all
  * @returns what the calculator's `compute` takes
  * @refuses every input at fault, not only the first: as parseQuantity · not-whole · not-chosen or the choice's own code ·
- *          not-an-option · not-asked for a name that the calculator does not know · specific-gravity-as-salinity
+ *          not-an-option · quantity-part-unknown (params: part) · not-asked for a name that the calculator does not know · specific-gravity-as-salinity
  */
 export function readInputs(of: AnyCalculator, body: unknown): { read: Read; refusals: Refusal[] } {
   const read: Read = {}
@@ -57,11 +57,18 @@ function readChoice(input: ChoiceInput, name: string, given: unknown): Result<st
     : refuse('not-an-option', name)
 }
 
+const quantityParts = ['value', 'unit']
+
 function readQuantity(
   input: QuantityInput,
   name: string,
   given: unknown,
 ): Result<ParsedQuantity | undefined> {
+  // a part that nobody knows may be one that was meant, under another name
+  if (typeof given === 'object' && given !== null && !Array.isArray(given))
+    for (const part of Object.keys(given))
+      if (!quantityParts.includes(part))
+        return refuse('quantity-part-unknown', name, { part: part.slice(0, 40) })
   const value = own(given, 'value')
   const blank =
     given === undefined ||

@@ -33,6 +33,7 @@ function inputSchema(of: AnyCalculator, name: string, input: Input): Schema {
   return {
     type: 'object',
     description,
+    additionalProperties: false,
     required: ['value', 'unit'],
     properties: {
       value: {

@@ -76,6 +76,8 @@ export function sayRefusal(of: AnyCalculator, refusal: Refusal): string {
   if (refusal.code === 'not-whole') return benchWords.notWhole({ what: name ?? '' })
   if (refusal.code === 'specific-gravity-as-salinity') return benchWords.gravityAsSalinity
   if (refusal.code === 'not-asked') return benchWords.notAsked
+  if (refusal.code === 'quantity-part-unknown')
+    return benchWords.partUnknown({ what: name ?? '', part: String(refusal.params?.part ?? '') })
   if (refusal.code === 'result-not-finite') return benchWords.resultNotFinite
   return isNumberRefusalCode(refusal.code)
     ? sayNumberRefusal({ ...refusal, code: refusal.code }, name)

@@ -10,6 +10,8 @@ export const benchWords = defineMessages({
   notWhole: (p: { what: string }) => `Type ${p.what} as a whole number.`,
   gravityAsSalinity:
     'This looks like a specific gravity. A salinity of sea water is about 35. If a salinity of 1 is meant, type 0.98 or 1.06.',
+  partUnknown: (p: { what: string; part: string }) =>
+    `A quantity is a value and a unit. Leave “${p.part}” out of ${p.what}, or check how it is spelled.`,
   notAsked: 'This calculator asks for nothing by that name. Leave it out, or check how it is spelled.',
   resultNotFinite:
     'The result is too large or too small to mean anything. Check the figures and their units.',

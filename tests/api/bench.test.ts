@@ -98,6 +98,12 @@ describe('the bench', () => {
       '/volume',
       'thousands-or-decimal',
     ],
+    [
+      'a part of a quantity that it does not know',
+      { volume: { value: '1000', unit: 'L', error: '50' } },
+      '/volume',
+      'quantity-part-unknown',
+    ],
     ['a name it does not know', { colour: 'red' }, '/colour', 'not-asked'],
     [
       '35 % by weight of a liquid without its density',

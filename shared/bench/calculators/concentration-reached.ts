@@ -30,6 +30,7 @@ export const concentrationReached = defineCalculator({
   words: defineMessages({
     name: 'Concentration reached',
     purpose: 'What concentration an amount that was really added makes, in a tank or in a bottle of stock.',
+    search: 'formalin formaldehyde',
     formula: 'concentration = amount × strength × share ÷ volume',
     'input.amount': 'Amount added',
     'help.amount': 'What was weighed or measured, of the product as it stands on the shelf.',

@@ -35,6 +35,7 @@ export const flowThroughBath = defineCalculator({
     name: 'Bath with flow',
     purpose:
       'The drip of a stock into flowing water for a target, with what primes the tank and what the whole time takes.',
+    search: 'formalin formaldehyde',
     formula: 'drip = flow × target ÷ (stock − target); priming = target × volume ÷ stock',
     'input.find': 'What to find',
     'option.find.rate': 'How fast the stock has to drip',

@@ -45,7 +45,8 @@ export const injection = defineCalculator({
     'help.mostPerSite': 'As the order says.',
     'result.volume': 'Volume to inject',
     'result.exact': 'Unrounded',
-    'result.drug': 'Drug in it',
+    'result.drug': 'Drug for this weight',
+    'result.taken': 'Drug in the rounded volume',
     'result.error': 'Rounding makes of the dose',
     'result.sites': 'Sites to divide it over',
     'result.each': 'Volume for each site',
@@ -53,6 +54,7 @@ export const injection = defineCalculator({
     'line.each': 'Volume for each site',
     'line.drug': 'Drug needed',
     'line.volume': 'Volume, unrounded',
+    'line.taken': 'Drug in the rounded volume',
     'line.share': 'The rounded volume in per cent of the unrounded one',
     'refusal.strength-of-a-water':
       'Give the strength as the label has it, in mg/mL, g/L or % w/v. In milligrams or micrograms per litre it is a thousandth of that or less.',
@@ -182,10 +184,17 @@ export const injection = defineCalculator({
         { key: 'exact', ...exact },
         drug,
         { key: 'error', value: errorPercent, unit: 'percent', figures: 2, kind: 'reading' },
+        { key: 'taken', value: takenMl.value * strengthMgPerMl, unit: 'mg', kind: 'dose' },
         ...split.value.figures,
       ],
       working: [
         ...working,
+        line(
+          'taken',
+          `${takenTerm} * ${strengthTerm(strength)} to mg`,
+          takenMl.value * strengthMgPerMl,
+          'mg',
+        ),
         line(
           'share',
           `${takenTerm} / (${valueTerm(millilitres, 'mL')}) * 100`,

@@ -10,6 +10,7 @@ import { defineMessages } from '../../messages/define-messages.ts'
 import { defineCalculator, type BenchCaution, type Outcome } from '../definition.ts'
 import { choice, quantity } from '../inputs.ts'
 import { line } from '../line.ts'
+import { formalinCautions, formalinWords } from './parts/formalin-cautions.ts'
 import { measuredFigure } from './parts/measured-figure.ts'
 import {
   basisInput,
@@ -31,6 +32,7 @@ export const stockSolution = defineCalculator({
   words: defineMessages({
     name: 'Stock solution',
     purpose: 'What goes into a stock solution of a strength, or how much of a stock makes a bath.',
+    search: 'formalin formaldehyde',
     formula: 'product = strength of the stock × its volume ÷ strength of the product',
     'input.find': 'What to find',
     'option.find.make': 'The product for a stock',
@@ -52,6 +54,7 @@ export const stockSolution = defineCalculator({
     'line.stock': 'Stock for the bath',
     'refusal.target-not-below-stock':
       'The target is not below the strength of the stock: no amount of it makes such a bath. Check both figures and their units.',
+    ...formalinWords,
     'caution.dissolves':
       'Check that this much dissolves in this water at this temperature. What lies on the bottom is not in the dose.',
     'caution.label':
@@ -125,7 +128,7 @@ export const stockSolution = defineCalculator({
     const { find, stockStrength, basis, stockVolume, target, volume, way, division } = given
     if (find === 'use') {
       if (!target || !volume || !way) return refuse('blank', 'target')
-      return stockInBath({ stockStrength, target, volume, way, division })
+      return stockInBath({ stockStrength, basis, target, volume, way, division })
     }
     if (!stockVolume) return refuse('blank', 'stockVolume')
     const stock = computeStock({
@@ -142,26 +145,32 @@ export const stockSolution = defineCalculator({
         : stock
     }
     const { amount, unit, measured, working } = stock.value
+    // what is measured here is the neat product; what it makes in a bath is another question
+    const neat = formalinCautions({ ...given, target: undefined, form: given.form ?? 'liquid' })
     return ok({
       figures: [measuredFigure('amount', amount, unit, measured)],
       working: withVolumeAsEntered(working, stockVolume),
       cautions: [
         { code: 'dissolves', level: 'warning' },
         { code: 'fill-up', level: 'note' },
+        ...neat.cautions,
       ],
+      sources: neat.sources,
     })
   },
 })
 
 interface Bath {
   stockStrength: ParsedQuantity
+  /** What stock and target are of. */
+  basis: string
   target: ParsedQuantity
   volume: ParsedQuantity
   way: 'on-top' | 'filled-up'
   division: ParsedQuantity | undefined
 }
 
-function stockInBath({ stockStrength, target, volume, way, division }: Bath): Result<Outcome> {
+function stockInBath({ stockStrength, basis, target, volume, way, division }: Bath): Result<Outcome> {
   const stockGPerL = stockStrength.value / gramsPerLitre
   const asked = { targetMgPerL: target.value, stockGPerL }
   const onTop = way === 'on-top'
@@ -183,7 +192,10 @@ function stockInBath({ stockStrength, target, volume, way, division }: Bath): Re
     doseLimits.volumeDriftPercent,
   )
   const much = onTop && level.ok && !level.value.within
+  const stock = { form: 'liquid', strength: stockStrength, strengthOf: basis } as const
+  const asFormalin = formalinCautions({ target, basis: 'active', ...stock })
   const cautions: BenchCaution[] = [
+    ...asFormalin.cautions,
     ...(much
       ? [
           {
@@ -199,5 +211,6 @@ function stockInBath({ stockStrength, target, volume, way, division }: Bath): Re
     figures: [measuredFigure('stock', millilitres.value, 'mL', measured.value)],
     working: [line('stock', `${wanted} * ${water} / ${divisor} to mL`, millilitres.value, 'mL')],
     cautions,
+    sources: asFormalin.sources,
   })
 }

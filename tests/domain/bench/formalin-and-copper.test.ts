@@ -62,6 +62,23 @@ describe('formalin by another name', () => {
       'make-up-dose',
       { ...bath, ...formalin, after: 'change', changed: '300 L', target: '10 mg/L', basis: 'active' },
     ],
+    [
+      'a stock made of it',
+      'stock-solution',
+      { ...formalin, find: 'make', stockStrength: '10 g/L', basis: 'active', stockVolume: '500 mL' },
+    ],
+    [
+      'a bath of the neat liquid as its stock',
+      'stock-solution',
+      {
+        find: 'use',
+        way: 'on-top',
+        volume: '1000 L',
+        target: '10 mg/L',
+        basis: 'active',
+        stockStrength: '370 g/L',
+      },
+    ],
   ] as const)('is warned of in %s', async (_, id, given) => {
     expect(await warningsOf(id, given)).toEqual(expect.arrayContaining(both))
     expect((await ask(id, given)).sources).toEqual(
@@ -70,7 +87,13 @@ describe('formalin by another name', () => {
   })
 
   it('tells people of fumes, gloves and air, and leaves the last word to label and law', () => {
-    for (const id of ['bath-dose', 'flow-through-bath', 'concentration-reached', 'make-up-dose']) {
+    for (const id of [
+      'bath-dose',
+      'flow-through-bath',
+      'concentration-reached',
+      'make-up-dose',
+      'stock-solution',
+    ]) {
       const words = calculatorAt(id)?.words as Record<string, string>
       for (const said of ['lungs', 'Gloves', 'moving air', 'label', 'law'])
         expect(words['caution.formalin-people']).toContain(said)
@@ -116,6 +139,20 @@ describe('more than any label of formalin', () => {
   it('says nothing of a powder', async () => {
     const given = { volume: '1000 L', basis: 'product', form: 'solid', target: '35 g/L' }
     expect(await warningsOf('bath-dose', given)).not.toContain('above-labels')
+  })
+})
+
+describe('more than a label of formalin allows for fish', () => {
+  // 21 CFR 529.1030: 250 µL/L for finfish; 250 µL/L × 1.08 g/mL × 0.37 is 99.9 mg/L of formaldehyde (by hand)
+  it.each([
+    [{ basis: 'product', form: 'liquid', target: '250 uL/L' }, false],
+    [{ basis: 'product', form: 'liquid', target: '251 uL/L' }, true],
+    [{ ...formalin, basis: 'active', target: '99.9 mg/L' }, false],
+    [{ ...formalin, basis: 'active', target: '100 mg/L' }, true],
+  ])('%o: %s', async (given, above) => {
+    const warnings = await warningsOf('bath-dose', { volume: '1000 L', ...given })
+    expect(warnings.includes('above-fish-labels')).toBe(above)
+    expect(warnings).not.toContain('above-labels')
   })
 })
 

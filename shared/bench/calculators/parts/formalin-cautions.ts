@@ -8,6 +8,9 @@ import type { BenchCaution } from '../../definition.ts'
 /** The highest figure on a label of formalin, µL/L, for eggs. @source cfr-529-1030 */
 export const mostOnLabelsUlPerL = 2000
 
+/** The highest figure on a label of formalin for fish, µL/L. @source cfr-529-1030 */
+const mostForFishUlPerL = 250
+
 /** Of a liquid whose label was not asked for: the one that its figures are held against. @source formalin-density */
 const usualDensityGPerMl = 1.08
 
@@ -24,6 +27,8 @@ export const formalinWords = {
     'By its target or its strength this may be formalin. It takes oxygen out of the water, about 1 mg/L for each 5 mg/L of it within 30 to 36 hours, and is more toxic in warm, soft or acid water. With a white precipitate in the bottle do not use it. Aerate, watch the animals, and be ready to flush.',
   'caution.formalin-people':
     'Formalin gives off formaldehyde, which burns eyes, skin and lungs, makes allergic, and can cause cancer. Gloves, goggles and moving air; close the bottle at once. The label and the law of the place come first.',
+  'caution.above-fish-labels':
+    'More than 250 µL/L of the product. On the label of formalin that is for eggs alone: fish at most 250 for an hour, salmonids above 10 °C at most 170.',
   'caution.above-labels':
     'More than 2,000 µL/L of the product, the highest figure on a label of formalin, which is for eggs. Read the order again, and in which unit it is.',
 } as const
@@ -49,6 +54,8 @@ export function formalinCautions(bath: Bath): {
   const mayBe = bath.target?.unit === 'uL/L' || hasStrengthOfFormalin(bath)
   const cautions: BenchCaution[] = []
   if (isAbove) cautions.push({ code: 'above-labels', level: 'warning' })
+  else if (mayBe && ulPerL !== null && exceeds(ulPerL, mostForFishUlPerL))
+    cautions.push({ code: 'above-fish-labels', level: 'warning' })
   if (mayBe)
     cautions.push({ code: 'formalin', level: 'warning' }, { code: 'formalin-people', level: 'warning' })
   return {
