@@ -31,14 +31,13 @@ export function isAsked(when: When | undefined, body: unknown): boolean {
  * @param body anything at all
  * @returns what the calculator's `compute` takes
  * @refuses every input at fault, not only the first: as parseQuantity · not-whole · not-chosen or the choice's own code ·
- *          not-an-option · quantity-part-unknown (params: part) · not-asked for a name that the calculator does not know · specific-gravity-as-salinity
+ *          not-an-option · too-near-zero · quantity-part-unknown (params: part) · not-asked for a name that the calculator does not know · specific-gravity-as-salinity
  */
 export function readInputs(of: AnyCalculator, body: unknown): { read: Read; refusals: Refusal[] } {
   const read: Read = {}
   const refusals: Refusal[] = []
   if (typeof body === 'object' && body !== null)
-    for (const name of Object.keys(body))
-      if (!Object.hasOwn(of.inputs, name)) refusals.push({ code: 'not-asked', field: name })
+    for (const name of unknownIn(of, body)) refusals.push({ code: 'not-asked', field: name })
   for (const [name, input] of Object.entries(of.inputs)) {
     if (!isAsked(input.when, body)) continue
     const given = own(body, name)
@@ -48,6 +47,17 @@ export function readInputs(of: AnyCalculator, body: unknown): { read: Read; refu
   }
   return { read, refusals }
 }
+
+/** More names than this say nothing new, and the answer to a body of ten thousand would be longer than the body. */
+const mostUnknown = 20
+
+const unknownIn = (of: AnyCalculator, body: object): string[] =>
+  Object.keys(body)
+    .filter((name) => !Object.hasOwn(of.inputs, name))
+    .slice(0, mostUnknown)
+
+/** Nearer to zero than this nothing is weighed, measured or lost; the digits of such figures are those of rounding alone. */
+const nearestToZero = 1e-12
 
 function readChoice(input: ChoiceInput, name: string, given: unknown): Result<string | undefined> {
   if (given === undefined || given === null || given === '')
@@ -92,6 +102,8 @@ function readQuantity(
   if (!parsed.ok) return parsed
   if (isSalinity(parsed.value, input) && readsAsSpecificGravity(parsed.value.value))
     return refuse('specific-gravity-as-salinity', name)
+  const typed = Math.abs(Number(parsed.value.entered.value))
+  if (typed > 0 && typed < nearestToZero) return refuse('too-near-zero', name)
   if (input.whole && !Number.isInteger(parsed.value.value)) return refuse('not-whole', name)
   return parsed
 }

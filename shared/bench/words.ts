@@ -78,6 +78,7 @@ export function sayRefusal(of: AnyCalculator, refusal: Refusal): string {
   if (refusal.code === 'not-asked') return benchWords.notAsked
   if (refusal.code === 'quantity-part-unknown')
     return benchWords.partUnknown({ what: name ?? '', part: String(refusal.params?.part ?? '') })
+  if (refusal.code === 'too-near-zero') return benchWords.tooNearZero({ what: name ?? '' })
   if (refusal.code === 'result-not-finite') return benchWords.resultNotFinite
   return isNumberRefusalCode(refusal.code)
     ? sayNumberRefusal({ ...refusal, code: refusal.code }, name)

@@ -13,6 +13,7 @@ export const benchPlotWords = defineMessages({
   gaps: 'Where the line is missing there is no answer.',
   ownMark: (p: { up: string }) => `as typed: ${p.up}`,
   ownRow: 'as typed',
+  ownPoint: (p: { across: string }) => `as typed ${p.across}`,
   noAnswer: 'no answer',
   asTable: 'Show as a table',
 })

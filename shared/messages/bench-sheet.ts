@@ -14,6 +14,8 @@ export const benchSheetWords = defineMessages({
   back: 'All calculators',
   result: 'Result',
   notYet: 'No figure yet',
+  unitOpen: (p: { field: string }) =>
+    `Answer first which unit “${p.field}” is in. Until then the number counts in the unit that stands beside it.`,
   startHere: 'Fill in the fields; the figure follows as you type.',
   between: (p: { low: string; high: string }) => `${p.low} to ${p.high}, by the stated errors`,
   working: 'Working',

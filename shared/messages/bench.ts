@@ -13,6 +13,8 @@ export const benchWords = defineMessages({
   partUnknown: (p: { what: string; part: string }) =>
     `A quantity is a value and a unit. Leave “${p.part}” out of ${p.what}, or check how it is spelled.`,
   notAsked: 'This calculator asks for nothing by that name. Leave it out, or check how it is spelled.',
+  tooNearZero: (p: { what: string }) =>
+    `Type ${p.what} again: it is too near to zero to reckon with. Check the figure and its unit.`,
   resultNotFinite:
     'The result is too large or too small to mean anything. Check the figures and their units.',
   notPlausible: (p: { what: string; shown: string; band: string }) =>

@@ -32,6 +32,8 @@ export type QuantityFieldProps = FieldProps &
     name?: string
     ref?: Ref<HTMLInputElement>
     onBlur?: () => void
+    /** Hears whether it is open in which unit the number is: until that is answered it counts in the earlier one. */
+    onAsking?: (field: string, asking: boolean) => void
   }
 
 /**
@@ -46,6 +48,13 @@ export function QuantityField(props: QuantityFieldProps) {
   const said = wrong ?? state.fault
   const below = state.working ? partWords.workingOut : (state.workedOut ?? hint)
   const { shown } = state
+  const asking = state.askedUnit !== null
+  const { onAsking } = props
+  useEffect(() => {
+    if (!asking || !onAsking) return undefined
+    onAsking(label, true)
+    return () => onAsking(label, false)
+  }, [asking, label, onAsking])
   const unit = useRef<HTMLSelectElement>(null)
 
   const onKeyDown = (event: KeyboardEvent<HTMLInputElement>) => {

@@ -73,6 +73,14 @@ describe.each(addresses)('a question to %s', (at) => {
     expectRefused(reply, 422, [{ pointer: '/target/value', code: 'character-not-writable' }])
   })
 
+  it('names the first twenty of ten thousand names that it does not know', async () => {
+    const many = Object.fromEntries(Array.from({ length: 10_000 }, (_, i) => [`name${String(i)}`, 1]))
+    const reply = await post(at, JSON.stringify(many))
+    expect(reply.status).toBe(422)
+    const unknown = (reply.body.errors as { code: string }[]).filter(({ code }) => code === 'not-asked')
+    expect(unknown).toHaveLength(20)
+  })
+
   it('is not read however deep it goes, nor however long it is', async () => {
     const deep = `{"target":${'['.repeat(80)}${']'.repeat(80)}}`
     expect((await post(at, deep)).body.errors).toMatchObject([{ code: 'nested-too-deep' }])

@@ -2,7 +2,10 @@ import { mkdirSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { calculators } from '../../shared/bench/calculators.ts'
+import { curveOf } from '../../shared/bench/curve.ts'
 import { evaluate } from '../../shared/bench/evaluate.ts'
+import { formatWorking } from '../../shared/bench/present.ts'
+import { fewerPoints, sayAcross, sayUp } from '../../shared/bench/say-curve.ts'
 import { sayCaution } from '../../shared/bench/words.ts'
 import { infoOf, nfkc, pageCount, pageTexts, textOf } from '../pdf/support/poppler.ts'
 import { startApi } from '../support/api.ts'
@@ -17,6 +20,8 @@ afterAll(() => api.stop())
 
 /** Lines of working and steps of a plan that one page has room for. */
 const mostLines = 12
+/** The same where a curve stands below them: a formula takes a line for so many characters. */
+const [mostLinesAboveCurve, charactersInLine] = [16, 48]
 const flat = (text: string) => nfkc(text).replace(/\s+/g, ' ')
 
 const at = (calculator: string) => `/api/bench/${calculator}/sheet`
@@ -101,7 +106,13 @@ describe('a printed sheet of the bench', () => {
         const { cautions, working, schedule } = evaluation.answer
         const bytes = await sheet(of.id, of.example)
         expect(infoOf(bytes)['Page size'], of.id).toBe(size)
-        const isLong = working.length + (schedule?.rows.length ?? 0) > mostLines
+        const drawn = formatWorking(evaluation.answer).reduce(
+          (lines, { formula }) => lines + Math.ceil(formula.length / charactersInLine),
+          0,
+        )
+        const isLong =
+          working.length + (schedule?.rows.length ?? 0) > mostLines ||
+          (drawn > mostLinesAboveCurve && curveOf(of, of.example) !== null)
         const pages = pageCount(bytes)
         if (pages > (isLong ? 2 : 1)) taken.push([of.id, pages])
         const first = flat(pageTexts(bytes)[0] ?? '')
@@ -111,6 +122,27 @@ describe('a printed sheet of the bench', () => {
     },
     120_000,
   )
+
+  it('has the curve as a table with the own point marked, and none for a plan, whose steps it has', async () => {
+    const ammonia = calculators.find(({ id }) => id === 'un-ionised-ammonia')
+    if (!ammonia) throw new Error('no such calculator')
+    const curve = curveOf(ammonia, ammonia.example)
+    if (!curve) throw new Error('no curve')
+    const text = flat(textOf(await sheet(ammonia.id, ammonia.example)))
+    const [, table = ''] = text.split('How it changes')
+    const shown = fewerPoints(curve, 8)
+    expect(shown).toHaveLength(8)
+    const across = shown.map((point) => `${point.own ? 'as typed ' : ''}${sayAcross(curve, point).number}`)
+    const up = shown.map((point) => sayUp(curve, point)?.number ?? 'no answer')
+    for (const figure of across) expect(table).toContain(flat(figure))
+    expect(table).toContain(flat(up.join(' ')))
+    expect(table.match(/as typed/g)).toHaveLength(1)
+    const plan = calculators.find(({ id }) => id === 'salinity-change')
+    if (!plan) throw new Error('no such calculator')
+    const steps = flat(textOf(await sheet(plan.id, plan.example)))
+    expect(steps).toContain('Step by step')
+    expect(steps).not.toContain('How it changes')
+  })
 
   it('says on every page of a long plan that it is no order', async () => {
     const steps = {

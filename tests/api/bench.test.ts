@@ -104,6 +104,12 @@ describe('the bench', () => {
       '/volume',
       'quantity-part-unknown',
     ],
+    [
+      'a figure of which only rounding is left',
+      { volume: { value: '0.0000000000000001', unit: 'L' } },
+      '/volume',
+      'too-near-zero',
+    ],
     ['a name it does not know', { colour: 'red' }, '/colour', 'not-asked'],
     [
       '35 % by weight of a liquid without its density',

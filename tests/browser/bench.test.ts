@@ -64,7 +64,12 @@ describe.each([deskSize, phoneSize])('the bench at $width px', (size) => {
     await result(page).getByText('Parts per million can mean three things', { exact: false }).waitFor()
     await field(page, 'Target in the water').fill('25')
     await unit(page, 'Target in the water', 'µL/L')
+    const open = result(page).getByText('Answer first which unit “Target in the water” is in', {
+      exact: false,
+    })
+    await open.waitFor()
     await page.getByRole('button', { name: '25 µL/L' }).first().click()
+    await open.waitFor({ state: 'detached' })
     await result(page)
       .getByText(/^94\.63/)
       .waitFor()

@@ -1,12 +1,16 @@
+import { curveOf } from '../../../shared/bench/curve.ts'
+import type { CurveAxis } from '../../../shared/bench/curve.ts'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import type { BenchAnswer } from '../../../shared/bench/evaluate.ts'
 import { formatCell, formatFigure, formatRange, formatWorking } from '../../../shared/bench/present.ts'
+import { axisName, fewerPoints, sayAcross, sayUp } from '../../../shared/bench/say-curve.ts'
 import { sayInputs } from '../../../shared/bench/say-inputs.ts'
 import { say, sayCaution, sayLine } from '../../../shared/bench/words.ts'
 import type { DocumentBlock, PdfDocumentModel } from '../../../shared/domain/documents/pdf-document-model.ts'
 import { sources } from '../../../shared/domain/sources.ts'
 import type { Zone } from '../../../shared/domain/time/instant.ts'
 import { benchPaper } from '../../../shared/messages/bench-paper.ts'
+import { benchPlotWords } from '../../../shared/messages/bench-plot.ts'
 import { sourceMarks } from '../../../shared/messages/bench-sheet.ts'
 import { sayInstantWithOffset } from '../../../shared/messages/say-date.ts'
 import { standingCaution } from '../../platform/pdf/standing-caution.ts'
@@ -85,6 +89,36 @@ function scheduleBlocks({ of, answer: { schedule } }: BenchPaper): DocumentBlock
   ]
 }
 
+/** Points of a curve that one line of a table has room for. */
+const mostPoints = 8
+
+/** What the result would be with another value of one input. The curve of a plan is its steps, which stand above. */
+function curveBlocks({ of, body }: BenchPaper): DocumentBlock[] {
+  const curve = curveOf(of, body)
+  if (!curve || curve.steps) return []
+  const name = (axis: CurveAxis) => axisName(of, { ...axis, scale: 'even' })
+  const points = fewerPoints(curve, mostPoints)
+  return [
+    { kind: 'heading', text: benchPlotWords.heading },
+    {
+      kind: 'table',
+      columns: [
+        { head: name(curve.across), share: 2.4, align: 'left' },
+        ...points.map((point) => {
+          const across = sayAcross(curve, point).number
+          const head = point.own ? benchPlotWords.ownPoint({ across }) : across
+          const share = point.own ? 1.7 : 1
+          return { head, share, align: 'right' as const }
+        }),
+      ],
+      rows: [
+        [name(curve.up), ...points.map((point) => sayUp(curve, point)?.number ?? benchPlotWords.noAnswer)],
+      ],
+      emptyText: benchPlotWords.noAnswer,
+    },
+  ]
+}
+
 function cautionBlocks({ of, answer: { cautions } }: BenchPaper): DocumentBlock[] {
   if (cautions.length === 0) return []
   const gravest = [...cautions].sort((a, b) => Number(a.level === 'note') - Number(b.level === 'note'))
@@ -140,6 +174,7 @@ export function benchDocument(paper: BenchPaper): PdfDocumentModel {
       ...cautionBlocks(paper),
       ...workingBlocks(paper),
       ...scheduleBlocks(paper),
+      ...curveBlocks(paper),
       ...sourceBlocks(paper),
       standingCaution(),
     ],

@@ -32,6 +32,9 @@ const inside = (value: unknown, key: PropertyKey): unknown =>
     ? (value as Record<PropertyKey, unknown>)[key]
     : undefined
 
+/** Names that no contract knows: more of them say nothing new, and would make an answer longer than the question. */
+const mostUnknown = 20
+
 /**
  * Every issue of a failed parse as a pointer, a stable code and a sentence, not only the first.
  *
@@ -42,7 +45,7 @@ export function fieldProblems(error: z.ZodError, given: unknown, root = ''): Fie
     const pointer = [root, ...issue.path.map(String)].join('/')
     const code = codeOf(issue, issue.path.reduce(inside, given))
     if (issue.code === 'unrecognized_keys')
-      return issue.keys.map((key) => ({ pointer: `${pointer}/${key}`, detail: issue.message, code }))
+      return issue.keys.slice(0, mostUnknown).map((key) => ({ pointer: `${pointer}/${key}`, detail: issue.message, code }))
     return [{ pointer, detail: issue.message, code }]
   })
 }

@@ -40,7 +40,7 @@ export const dripAcclimation = defineCalculator({
     'line.drip': 'Drip',
     'line.time': 'Time',
     'line.fastest': 'Change in an hour, at the beginning',
-    'column.minutes': 'Minutes',
+    'column.minutes': 'Time',
     'column.litres': 'Litres dripped in',
     'column.salinity': 'Salinity',
     'caution.ammonia':

@@ -71,7 +71,7 @@ export const flowThroughBath = defineCalculator({
     'line.stock-used': 'Stock for the whole time',
     'line.drug-used': 'The substance or product in it',
     'column.turnovers': 'Turnovers',
-    'column.minutes': 'Minutes',
+    'column.minutes': 'Time',
     'column.unprimed': 'Without priming',
     'refusal.stock-of-other-kind':
       'Give target and stock both by weight, or both by volume. Undiluted product is 100 % v/v and its target is in µL/L.',

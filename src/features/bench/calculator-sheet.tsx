@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useRef, useState } from 'react'
+import { useCallback, useDeferredValue, useMemo, useRef, useState } from 'react'
 import { Link, useLocation } from 'react-router-dom'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
 import { evaluate } from '../../../shared/bench/evaluate.ts'
@@ -36,6 +36,10 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
   const drawnBody = useDeferredValue(body)
   const water = useEnclosureWater(of, setDraft, enclosureLeft(state))
   const result = useRef<HTMLElement>(null)
+  const [asking, setAsking] = useState<readonly string[]>([])
+  const onAsking = useCallback((label: string, open: boolean) => {
+    setAsking((labels) => [...labels.filter((each) => each !== label), ...(open ? [label] : [])])
+  }, [])
   const untouched = isUntouched(draft)
   const startAgain = (next: Draft) => {
     water.forget()
@@ -80,6 +84,7 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
             onChange={setDraft}
             wrong={wrong}
             noteOf={(name) => water.note(name, draft[name])}
+            onAsking={onAsking}
           />
           {untouched ? null : <ResultBar of={of} evaluation={evaluation} result={result} />}
         </Area>
@@ -87,6 +92,11 @@ export function CalculatorSheet({ of }: { of: AnyCalculator }) {
           <ResultSaid of={of} evaluation={evaluation} untouched={untouched} />
           <section ref={result} tabIndex={-1} className="net-volume" aria-label={words.result}>
             <h2 className="t-label">{words.result}</h2>
+            {asking.map((field) => (
+              <p key={field} className="t-strong">
+                {words.unitOpen({ field })}
+              </p>
+            ))}
             {evaluation.ok ? (
               <ResultFigures of={of} answer={evaluation.answer} />
             ) : (

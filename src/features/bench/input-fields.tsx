@@ -23,6 +23,7 @@ export function InputFields({
   onChange,
   wrong,
   noteOf,
+  onAsking,
 }: {
   of: AnyCalculator
   draft: Draft
@@ -30,6 +31,8 @@ export function InputFields({
   wrong: (name: string) => string | undefined
   /** What an enclosure says for a field. */
   noteOf: (name: string) => FieldNote | undefined
+  /** Hears, by its label, of a field where it is open in which unit its number is. */
+  onAsking: (label: string, asking: boolean) => void
 }) {
   return askedInputs(of, draft).map((name) => {
     const input = of.inputs[name]
@@ -56,6 +59,7 @@ export function InputFields({
         {...common}
         hint={note ? <HintWithNote hint={common.hint} note={note} /> : common.hint}
         name={name}
+        onAsking={onAsking}
         allowNegative={mayBeNegative(input)}
         units={input.units.map((unit) => ({ unit, label: unitOf(unit).symbol }))}
         quantity={typeof given === 'object' ? given : { value: '', unit: input.units[0] ?? '' }}

@@ -1,13 +1,7 @@
 import type { Curve, CurveAxis, CurvePoint } from '../../../shared/bench/curve.ts'
-import { formatFigure } from '../../../shared/bench/present.ts'
-import { roundFigure } from '../../../shared/bench/round-figure.ts'
-import { say, wordOf } from '../../../shared/bench/words.ts'
-import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import { sayUp } from '../../../shared/bench/say-curve.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { formatReading } from '../../../shared/domain/quantities/format-reading.ts'
-import type { FormattedQuantity } from '../../../shared/domain/quantities/formatted-quantity.ts'
-import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
-import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import { benchPlotWords as words } from '../../../shared/messages/bench-plot.ts'
 
 export interface Tick {
@@ -41,25 +35,6 @@ const upRoom = 40
 const mostPowers = 9
 /** A vertical axis begins at 0 unless all that is on it is above this share of its highest. */
 const startsAtZero = 0.5
-
-/** What is read off an axis: "Concentration left, mg/L". */
-export function axisName(of: AnyCalculator, axis: CurveAxis): string {
-  const name = wordOf(of, `axis.${axis.word}`) ?? say(of, axis.word)
-  const { symbol, symbolFirst } = unitOf(axis.unit)
-  const whole = symbol === '' || symbolFirst ? name : words.axis({ name, symbol })
-  return axis.scale === 'tenfold' ? words.tenfold({ axis: whole }) : whole
-}
-
-/** A place on the horizontal axis, without trailing zeros. */
-export function sayAcross(curve: Curve, point: CurvePoint): FormattedQuantity {
-  return formatReading(quantityOf(Number(point.across.toPrecision(6)), curve.across.unit))
-}
-
-/** What is read there: the person's own as the result shows it, any other with the digits that the formula supports. */
-export function sayUp(curve: Curve, point: CurvePoint): FormattedQuantity | null {
-  if (point.up === null) return null
-  return formatFigure(point.own ?? roundFigure({ ...curve.up, key: curve.up.word, value: point.up }, null))
-}
 
 /**
  * Places everything of the drawing of a curve.

@@ -1,10 +1,11 @@
 import { memo, useId, useMemo, useState } from 'react'
 import { curveOf, type Curve, type CurvePoint } from '../../../shared/bench/curve.ts'
 import type { AnyCalculator } from '../../../shared/bench/definition.ts'
+import { axisName, sayAcross, sayUp } from '../../../shared/bench/say-curve.ts'
 import { benchPlotWords as words } from '../../../shared/messages/bench-plot.ts'
 import { Quantity } from '../../ui/quantity.tsx'
 import { useWidth } from '../../ui/use-width.ts'
-import { axisName, layOutCurve, sayAcross, sayUp } from './plot-model.ts'
+import { layOutCurve } from './plot-model.ts'
 
 const height = 232
 const narrowest = 240

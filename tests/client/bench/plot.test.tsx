@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest'
 import { calculatorAt } from '../../../shared/bench/calculators.ts'
 import { curveOf, type Curve } from '../../../shared/bench/curve.ts'
 import { BenchPlot } from '../../../src/features/bench/plot.tsx'
-import { axisName, layOutCurve } from '../../../src/features/bench/plot-model.ts'
+import { axisName } from '../../../shared/bench/say-curve.ts'
+import { layOutCurve } from '../../../src/features/bench/plot-model.ts'
 import { draw, drawsComponents, one } from '../../support/react.tsx'
 
 drawsComponents()
