@@ -45,7 +45,9 @@ export function fieldProblems(error: z.ZodError, given: unknown, root = ''): Fie
     const pointer = [root, ...issue.path.map(String)].join('/')
     const code = codeOf(issue, issue.path.reduce(inside, given))
     if (issue.code === 'unrecognized_keys')
-      return issue.keys.slice(0, mostUnknown).map((key) => ({ pointer: `${pointer}/${key}`, detail: issue.message, code }))
+      return issue.keys
+        .slice(0, mostUnknown)
+        .map((key) => ({ pointer: `${pointer}/${key}`, detail: issue.message, code }))
     return [{ pointer, detail: issue.message, code }]
   })
 }
