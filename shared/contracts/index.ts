@@ -34,6 +34,7 @@ import * as waterCases from './water-cases.contract.ts'
 import * as waterMap from './water-map.contract.ts'
 import * as waterVolumes from './water-volumes.contract.ts'
 
+import * as weightOrders from './weight-orders.contract.ts'
 import * as taxa from './taxa.contract.ts'
 
 /** Modules that hold contracts; a new feature adds its own here. */
@@ -52,6 +53,7 @@ const modules = [
   cautionFirings,
   cautionRules,
   orders,
+  weightOrders,
   adverseEvents,
   doses,
   taxa,

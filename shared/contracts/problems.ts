@@ -83,6 +83,7 @@ export const problemStatus = {
   'order-incomplete': 422,
   'dose-line-not-usable': 422,
   'product-not-for-water': 422,
+  'product-not-by-weight': 422,
   'caution-stops': 409,
   'caution-not-fired': 409,
   'cautions-unread': 409,

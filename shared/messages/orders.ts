@@ -45,6 +45,8 @@ export const figureChanged = defineMessages({
     'A dose line of this drug is not what was entered. Have it proposed and confirmed anew, and tell the administrator.',
   volume_determinations:
     'The volume of this water is not the one that was determined. Determine it anew, have it confirmed, and tell the administrator.',
+  weights:
+    'The weight of this animal is not the one that was recorded. Do not dose by it: weigh it anew, and tell the administrator.',
 })
 
 /** Why an order is refused, and what to do. */

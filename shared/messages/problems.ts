@@ -44,6 +44,7 @@ export const problemTitles = defineMessages({
   'order-incomplete': 'The order is not complete',
   'dose-line-not-usable': 'This dose line cannot be ordered from',
   'product-not-for-water': 'This product is not given into water',
+  'product-not-by-weight': 'This product is not given so to an animal',
   'caution-stops': 'A caution stops this',
   'caution-not-fired': 'The cautions have changed since they were read',
   'cautions-unread': 'There are warnings to read first',

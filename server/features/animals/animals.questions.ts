@@ -33,6 +33,8 @@ export interface AnimalFacts {
   enclosureCode: string | null
   count: Count
   newestWeight: NewestWeight | null
+  /** Row of the newest weight. */
+  newestWeightId: string | null
   weightBand: WeightBand | null
   sensitivities: { code: SensitivityCode; level: SensitivityLevel }[]
   lock: 'none' | 'boundary' | 'all'
@@ -66,6 +68,7 @@ export function createAnimalQuestions(parts: { dataSource: Db }) {
         enclosureCode: row.enclosure_id === null ? null : row.enclosure_code,
         count: presentCount(row),
         newestWeight: presentNewestWeight(row),
+        newestWeightId: row.weight_id,
         weightBand: bandForStage(bands, row.stage),
         sensitivities: (taxon?.sensitivities ?? []).map(({ code, level }) => ({ code, level })),
         lock: row.lock,

@@ -36,6 +36,7 @@ export interface AnimalReadRow {
   statement_low: number
   statement_high: number
   moved_since: number
+  weight_id: string | null
   weight_kg: number | null
   weight_value: string
   weight_unit: string
@@ -94,7 +95,7 @@ const asOf = `
          coalesce(c.ledger, 0)::int AS ledger,
          n.basis AS statement_basis, n.low AS statement_low, n.high AS statement_high,
          coalesce(c.moved_since, 0)::int AS moved_since,
-         w.weight_kg, w.entered_value AS weight_value, w.entered_unit AS weight_unit,
+         w.id AS weight_id, w.weight_kg, w.entered_value AS weight_value, w.entered_unit AS weight_unit,
          w.animals_weighed AS weight_animals, w.basis AS weight_basis, w.happened_at AS weight_at,
          w.happened_on::text AS weight_on,
          (SELECT count(*)::int FROM discrepancies q

@@ -152,7 +152,7 @@ export function createOrders(parts: OrdersOutside) {
       ...orderRoutes({
         service,
         queries,
-        situation,
+        situation: { ...situation, animals: parts.animals.questions },
         askBench: parts.askBench,
         now,
         noteAmountsSeen,

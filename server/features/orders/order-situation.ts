@@ -138,31 +138,42 @@ const mostYearsOff = 2
 const hourMs = 3_600_000
 const yearMs = 366 * 24 * hourMs
 
+type Schedule = Pick<BathOrderFields, 'startsAt' | 'doses' | 'intervalHours'>
+
 /** Refuses a first dose whose year cannot be meant: nothing planned or done is that far from today. */
-function refuseStart({ startsAt }: BathOrderFields, now: Date): void {
+function refuseStart({ startsAt }: Schedule, now: Date, at: string): void {
   if (startsAt === null) return
   if (Math.abs(Date.parse(startsAt) - now.getTime()) <= mostYearsOff * yearMs) return
   const detail = orderProblemWords.startYears({ years: mostYearsOff })
   throw new Problem('bad-input', {
     detail,
-    errors: [{ pointer: '/fields/startsAt', detail, code: 'start-beyond-reason' }],
+    errors: [{ pointer: `${at}/startsAt`, detail, code: 'start-beyond-reason' }],
   })
 }
 
 /** Refuses a plan over years: nobody can know the animals and the water of its last dose. */
-function refusePlan({ doses, intervalHours }: BathOrderFields): void {
+function refusePlan({ doses, intervalHours }: Schedule, at: string): void {
   if (intervalHours === null || (doses - 1) * intervalHours * hourMs <= mostYearsOff * yearMs) return
   const detail = orderProblemWords.planYears({ years: mostYearsOff })
   throw new Problem('bad-input', {
     detail,
-    errors: [{ pointer: '/fields/doses', detail, code: 'plan-beyond-reason' }],
+    errors: [{ pointer: `${at}/doses`, detail, code: 'plan-beyond-reason' }],
   })
+}
+
+/**
+ * Refuses times that nobody can mean, whatever is ordered.
+ *
+ * @param at where the fields stand in what was sent: "/fields"
+ */
+export function refuseSchedule(schedule: Schedule, now: Date, at: string): void {
+  refuseStart(schedule, now, at)
+  refusePlan(schedule, at)
 }
 
 /** Refuses what an order cannot mean, whatever else is still missing. */
 export async function refuseUnfit(parts: SituationParts, fields: BathOrderFields, now: Date): Promise<void> {
-  refuseStart(fields, now)
-  refusePlan(fields)
+  refuseSchedule(fields, now, '/fields')
   await refuseProduct(parts, fields)
   await refuseDoseLine(parts, fields)
 }

@@ -1,4 +1,5 @@
 import * as contracts from '../../../shared/contracts/orders.contract.ts'
+import { previewWeightOrder } from '../../../shared/contracts/weight-orders.contract.ts'
 import { csvReply } from '../../platform/http/csv-reply.ts'
 import { route } from '../../platform/http/route.ts'
 import type { Route } from '../../platform/http/route.ts'
@@ -6,18 +7,20 @@ import type { Actor } from '../../platform/http/request-context.ts'
 import type { NoteAmountsPreviewed, NoteAmountsSeen } from './amounts-seen.service.ts'
 import { ordersCsvColumns } from './orders-csv.ts'
 import { readSituation, refuseUnfit } from './order-situation.ts'
-import type { SituationParts } from './order-situation.ts'
 import type { LabelPrinter } from './print-label.ts'
 import type { OrderQueries } from './orders.queries.ts'
 import type { OrdersService } from './orders.service.ts'
 import { saidBench } from './order-bench.ts'
 import type { AskBench } from './order-bench.ts'
 import { presentPreview } from './preview-order.ts'
+import { presentWeightPreview } from './preview-weight-order.ts'
+import { readWeightSituation, refuseUnfitByWeight } from './weight-situation.ts'
+import type { WeightSituationParts } from './weight-situation.ts'
 
 export interface OrderRouteParts {
   service: OrdersService
   queries: OrderQueries
-  situation: SituationParts
+  situation: WeightSituationParts
   askBench: AskBench
   now(): Date
   noteAmountsSeen: NoteAmountsSeen
@@ -61,6 +64,10 @@ export function orderRoutes(parts: OrderRouteParts): Route[] {
           ? await queries.benchForPreview(query.order, context.actor, { body, isWorkedOut: dose !== null })
           : body
       return presentPreview(body, found, await saidBench(askBench, asked, dose))
+    }),
+    route(previewWeightOrder, async ({ body }) => {
+      await refuseUnfitByWeight(situation, body, now())
+      return presentWeightPreview(body, await readWeightSituation(situation, body, now()))
     }),
     route(contracts.draftOrder, async ({ body, context }) => {
       const { number } = await service.draftOrder(context, body.id, body.fields)

@@ -1,3 +1,5 @@
+import type { RouteByWeight } from '../orders/order-route.ts'
+
 /** Agents that are given into the water. */
 export const immersionAgents = [
   'formalin',
@@ -43,6 +45,20 @@ export type AgentCode = (typeof agentCodes)[number]
  */
 export function isGivenInWater(agent: AgentCode, linesInForce: readonly { agent: AgentCode }[]): boolean {
   return immersionAgents.some((one) => one === agent) || linesInForce.some((line) => line.agent === agent)
+}
+
+/** Agents of the water that are given into the mouth as well; into a needle none of them goes. */
+const alsoByMouth: readonly AgentCode[] = ['praziquantel', 'oxytetracycline', 'metronidazole', 'fenbendazole']
+
+/**
+ * Whether a drug may be ordered by the weight of the animal on a route: one that is given to the animal itself on any,
+ * and of those given into water the few that are given by mouth too. Formalin is never injected.
+ *
+ * @source treatments reference, dose lines: praziquantel, metronidazole and fenbendazole by mouth (V), oxytetracycline (P);
+ *         that no other is taken: project default (P)
+ */
+export function isGivenByWeight(agent: AgentCode, route: RouteByWeight): boolean {
+  return systemicAgents.some((one) => one === agent) || (route === 'by-mouth' && alsoByMouth.includes(agent))
 }
 
 /**
