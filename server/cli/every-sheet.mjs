@@ -71,6 +71,7 @@ export const everySheet = [
   { name: 'check-print', as: 'vet', address: '/check/:fingerprint', fill: '0123456789ABCDEF' },
   { name: 'orders', as: 'tech', address: '/orders' },
   { name: 'order-new', as: 'vet', address: '/orders/new' },
+  { name: 'dose-by-weight', as: 'vet', address: '/orders/by-weight' },
   {
     name: 'order',
     as: 'vet',

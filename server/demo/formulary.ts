@@ -1,3 +1,4 @@
+import type { AgentCode } from '../../shared/domain/formulary/agent.ts'
 import type { Composition } from '../composition.ts'
 import type { DemoActors } from './people.ts'
 
@@ -5,18 +6,11 @@ const daysFrom = (at: Date, days: number) =>
   new Date(at.getTime() + days * 86_400_000).toISOString().slice(0, 10)
 
 interface DemoProduct {
-  agent:
-    | 'formalin'
-    | 'copper-sulfate'
-    | 'praziquantel'
-    | 'hydrogen-peroxide'
-    | 'sodium-chloride'
-    | 'chloramine-t'
-    | 'tricaine'
+  agent: AgentCode
   name: string
   form: 'liquid' | 'powder' | 'crystals'
   strength: { value: string; unit: string }
-  basis: 'active' | 'product' | 'salt'
+  basis: 'active' | 'product' | 'salt' | 'base'
   density?: { value: string; unit: string }
   lots: { number: string; expiresInDays: number }[]
 }
@@ -82,6 +76,22 @@ const products: DemoProduct[] = [
     strength: { value: '100', unit: 'percent_w_w' },
     basis: 'salt',
     lots: [{ number: 'TM-0123', expiresInDays: 330 }],
+  },
+  {
+    agent: 'enrofloxacin',
+    name: 'Enrofloxacin 2.27 % for injection',
+    form: 'liquid',
+    strength: { value: '22.7', unit: 'mg/mL' },
+    basis: 'base',
+    lots: [{ number: 'EN-5106', expiresInDays: 260 }],
+  },
+  {
+    agent: 'meloxicam',
+    name: 'Meloxicam for injection',
+    form: 'liquid',
+    strength: { value: '5', unit: 'mg/mL' },
+    basis: 'active',
+    lots: [{ number: 'ML-0442', expiresInDays: 190 }],
   },
 ]
 

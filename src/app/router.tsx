@@ -41,6 +41,7 @@ const sheetRoutes: RouteObject[] = [
   { path: 'animals/:accession', lazy: () => import('./routes/animal.tsx') },
   { path: 'orders', lazy: () => import('./routes/orders/orders.tsx') },
   { path: 'orders/new', lazy: () => import('./routes/orders/new-order.tsx') },
+  { path: 'orders/by-weight', lazy: () => import('./routes/orders/by-weight.tsx') },
   { path: 'orders/:number/edit', lazy: () => import('./routes/orders/edit-order.tsx') },
   { path: 'orders/:number', lazy: () => import('./routes/orders/order.tsx') },
   { path: 'orders/:number/sheet', lazy: () => import('./routes/orders/sheet.tsx') },

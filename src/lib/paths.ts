@@ -33,6 +33,7 @@ export const paths = {
 
   orders: () => '/orders',
   newOrder: () => '/orders/new',
+  doseByWeight: () => '/orders/by-weight',
   copyOrder: (number: string) => `/orders/new?from=${part(number)}`,
   order: (number: string) => `/orders/${part(number)}`,
   editOrder: (number: string) => `/orders/${part(number)}/edit`,

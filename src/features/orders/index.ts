@@ -1,6 +1,7 @@
 export { AdverseEvents } from './adverse-events.tsx'
 export { OrdersList, ordersAsked } from './orders-list.tsx'
 export { OrderForm } from './order-form.tsx'
+export { WeightForm } from './weight-form.tsx'
 export { orderTitle, SignedOrder, UnsignedOrder } from './order-view.tsx'
 export { orderQuery, ordersCsvAddress, ordersKey, ordersQuery } from './queries.ts'
 export { OrderSignature } from './signature-state.tsx'

@@ -30,7 +30,8 @@ export interface FieldsProps {
 const strengthText = (product: Product) =>
   product.record === 'broken' ? words.notAsEntered : doseOfEntered(product.strength)
 
-const productText = (product: Product) =>
+/** The product in full: drug, name, strength and what the strength is of. */
+export const productText = (product: Product) =>
   words.productText({
     name: agentNames[product.agent],
     product: product.productName,

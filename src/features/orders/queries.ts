@@ -10,6 +10,8 @@ import {
   printOrderLabel,
 } from '../../../shared/contracts/orders.contract.ts'
 import type { BathOrderFields } from '../../../shared/contracts/order-primitives.ts'
+import { previewWeightOrder } from '../../../shared/contracts/weight-orders.contract.ts'
+import type { WeightOrderFields } from '../../../shared/contracts/weight-orders.contract.ts'
 import { addressOf, api } from '../../lib/api-client.ts'
 
 export const ordersKey = ['orders'] as const
@@ -48,6 +50,19 @@ export const previewQuery = (fields: BathOrderFields | null, order: string | und
     queryFn: ({ signal }) => {
       if (!fields) throw new Error('Nothing to judge yet')
       return api(previewOrder, { body: fields, query: order === undefined ? {} : { order }, signal })
+    },
+    enabled: fields !== null,
+    placeholderData: keepPreviousData,
+    staleTime: 15_000,
+  })
+
+/** A dose by weight worked out and judged; nothing is kept. */
+export const weightPreviewQuery = (fields: WeightOrderFields | null) =>
+  queryOptions({
+    queryKey: [...previewsKey, 'by-weight', fields],
+    queryFn: ({ signal }) => {
+      if (!fields) throw new Error('Nothing to judge yet')
+      return api(previewWeightOrder, { body: fields, signal })
     },
     enabled: fields !== null,
     placeholderData: keepPreviousData,

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query'
 import { Plus } from 'lucide-react'
 import { orderPhases } from '../../../../shared/contracts/orders.contract.ts'
+import { weightFormWords } from '../../../../shared/messages/weight-form.ts'
 import { orderListWords as words, orderPhaseNames } from '../../../../shared/messages/orders-screens.ts'
 import { everyEnclosure } from '../../../features/enclosures/index.ts'
 import { ordersAsked, ordersCsvAddress, OrdersList } from '../../../features/orders/index.ts'
@@ -28,9 +29,14 @@ export function Component() {
       source={words.source}
       primary={
         may.allowed ? (
-          <ButtonLink kind="primary" block icon={Plus} to={paths.newOrder()}>
-            {may.conditions.includes('proposal-only') ? words.propose : words.write}
-          </ButtonLink>
+          <div className="stack">
+            <ButtonLink kind="primary" block icon={Plus} to={paths.newOrder()}>
+              {may.conditions.includes('proposal-only') ? words.propose : words.write}
+            </ButtonLink>
+            <ButtonLink block to={paths.doseByWeight()}>
+              {weightFormWords.toList}
+            </ButtonLink>
+          </div>
         ) : (
           <p className="hint">{may.why}</p>
         )
