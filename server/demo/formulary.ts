@@ -124,7 +124,7 @@ export async function seedFormulary(
   }
   const { lines } = await formulary.queries.formulary()
   const confirmed = lines.filter((line) =>
-    ['formalin', 'copper-sulfate', 'praziquantel'].includes(line.agent),
+    ['formalin', 'copper-sulfate', 'praziquantel', 'meloxicam'].includes(line.agent),
   )
   for (const line of confirmed) await formulary.service.confirmDoseLine(vet, line.id, undefined)
 }

@@ -50,6 +50,11 @@ export const sources = {
     citation: '29 CFR 1910.1048, formaldehyde at work; read in the text of November 2024',
     mark: 'V',
   },
+  'govett-2009': { citation: 'Govett et al. 2009: ceftazidime in koi', mark: 'V' },
+  'fredholm-2016': { citation: 'Fredholm et al. 2016: meloxicam in Nile tilapia', mark: 'V' },
+  'greene-2020': { citation: 'Greene et al. 2020: ketoprofen in trout and tilapia', mark: 'V' },
+  'exotic-formulary': { citation: 'A formulary of exotic animals (Carpenter), from memory', mark: 'M' },
+  'harms-2005': { citation: 'Harms et al. 2005: butorphanol in fish, from memory', mark: 'M' },
   'bunting-2009': {
     citation: 'Bunting et al. 2009, Journal of Zoo and Wildlife Medicine 40(3): itraconazole in penguins',
     mark: 'V',

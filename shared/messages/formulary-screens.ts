@@ -21,6 +21,7 @@ export const formularyWords = defineMessages({
   water: 'Water',
   contact: 'Longest contact',
   noContact: 'none named',
+  intoNoWater: 'none: given to the animal',
   origin: 'Source and mark',
   standing: 'Standing',
   noLines: 'No dose line here',

@@ -44,6 +44,12 @@ export const doseUses = defineMessages({
   'salt-prolonged': 'salt, left in the water',
   sedation: 'sedation and anaesthesia',
   'protozoa-course': 'protozoa, course in sea water',
+  'bacteria-injection': 'bacteria, by injection',
+  'bacteria-by-mouth': 'bacteria, by mouth',
+  'worms-by-mouth': 'worms and flukes, by mouth',
+  'fungi-by-mouth': 'fungi in penguins, by mouth',
+  'pain-injection': 'pain, by injection',
+  'inflammation-injection': 'shock and trauma, by injection',
 } satisfies Record<DoseUse, string>)
 
 export const waterKinds = defineMessages({

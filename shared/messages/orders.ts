@@ -75,6 +75,7 @@ export const orderProblemWords = defineMessages({
     `From the first dose to the last it would be more than ${counted(p.years, 'year', 'years')}. Check the number of doses and the hours between them.`,
   lineNotInForce:
     'This dose line is not in force: it waits to be confirmed, or another took its place. Choose the dose line again.',
+  lineByWeight: 'This dose line goes by the weight of the animal. Choose a dose line for the water.',
   lineOfOther: (p: { line: string; product: string }) =>
     `This dose line is one of ${p.line}, and the product is ${p.product}. Choose a dose line of the product.`,
   notForWater: (p: { product: string }) =>

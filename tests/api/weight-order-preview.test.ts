@@ -2,7 +2,7 @@ import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { WeightOrderFields, WeightOrderPreview } from '../../shared/contracts/weight-orders.contract.ts'
 import { anAnimal, aGroup, aStingray } from '../builders/a-collection.ts'
-import { aProduct, aBathWater } from '../builders/an-order.ts'
+import { aBathWater, aProduct, bathFields } from '../builders/an-order.ts'
 import { startApi } from '../support/api.ts'
 import type { TestApi } from '../support/api.ts'
 
@@ -146,6 +146,44 @@ describe('a dose by the weight of an animal', () => {
     expect(codesOf(await preview(fieldsFor(small.id)), 'R33')).toEqual(['weight-implausible'])
     const sound = await aRay(['42', 'kg'])
     expect(codesOf(await preview(fieldsFor(sound.id)), 'R33')).toEqual([])
+  })
+
+  it('is held against the lines of its own route: within them, above them, and where there is none', async () => {
+    const ray = await aRay(['42', 'kg'])
+    // the formulary of the reference has 5 to 10 mg/kg of the base (M), by injection and by mouth
+    const within = await preview(fieldsFor(ray.id))
+    expect(codesOf(within, 'R26')).not.toContain('no-default-range')
+    for (const [value, level, code] of [
+      ['15', 'warning', 'over-default'],
+      ['25', 'stop', 'far-over-default'],
+    ]) {
+      const { cautions } = await preview(fieldsFor(ray.id, { target: { value: value ?? '', unit: 'mg/kg' } }))
+      const [over] = cautions.filter(({ ruleId }) => ruleId === 'R26')
+      expect([over?.level, over?.code]).toEqual([level, code])
+    }
+    const onSkin = await preview(fieldsFor(ray.id, { route: 'on-skin', place: null }))
+    expect(codesOf(onSkin, 'R26')).toEqual(['no-default-range'])
+  })
+
+  it('has lines that no bath is ordered by', async () => {
+    const { agent } = await api.as('veterinarian')
+    const formulary = await agent.get('/api/formulary').expect(200)
+    const line = (formulary.body.lines as { id: string; use: string; agent: string }[]).find(
+      (one) => one.agent === 'praziquantel' && one.use === 'worms-by-mouth',
+    )
+    const powder = await aProduct(api, {})
+    const fish = await aRay(['42', 'kg'])
+    const bath = bathFields({
+      enclosureId: tank.id,
+      animalIds: [fish.id],
+      productId: powder.id,
+      lotId: powder.lotId,
+    })
+    const refused = await agent.post('/api/order-previews').send({ ...bath, doseLineId: line?.id })
+    expect([refused.status, refused.body.code]).toEqual([422, 'dose-line-not-usable'])
+    expect(refused.body.detail).toBe(
+      'This dose line goes by the weight of the animal. Choose a dose line for the water.',
+    )
   })
 
   it('says what is still to be filled in', async () => {

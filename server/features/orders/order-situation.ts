@@ -6,8 +6,8 @@ import type { BathOrderDraft, ChosenProduct } from '../../../shared/domain/order
 import { judgeBathOrder } from '../../../shared/domain/orders/judge-bath-order.ts'
 import type { OrderJudgement } from '../../../shared/domain/orders/judge-bath-order.ts'
 import { isGivenInWater } from '../../../shared/domain/formulary/agent.ts'
-import { staysInWater } from '../../../shared/domain/formulary/dose-line.ts'
-import type { ConcentrationUnit, DefaultRange } from '../../../shared/domain/cautions/caution-facts.ts'
+import { routeOfUse, staysInWater } from '../../../shared/domain/formulary/dose-line.ts'
+import type { DefaultRange, DoseUnit } from '../../../shared/domain/cautions/caution-facts.ts'
 import type { CautionSettings, CautionStage } from '../../../shared/domain/cautions/caution-rule.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
@@ -90,7 +90,7 @@ export function chosenOf(
 const rangeOf = ({ low, high, unit, basis, longestContactMinutes, water, use }: DoseLine): DefaultRange => ({
   low,
   high,
-  unit: unit as ConcentrationUnit,
+  unit: unit as DoseUnit,
   basis,
   longestContactMinutes,
   water,
@@ -109,6 +109,8 @@ async function refuseProduct(parts: SituationParts, { productId }: BathOrderFiel
   })
 }
 
+const isForBath = ({ use }: DoseLine): boolean => routeOfUse(use) === 'immersion'
+
 /**
  * Refuses an order that names a dose line of another drug, or one that is not in force. A signed order keeps the line it
  * was signed with, whatever becomes of it.
@@ -119,10 +121,13 @@ async function refuseDoseLine(parts: SituationParts, fields: BathOrderFields): P
   const { agent } = await parts.product(productId)
   const line = await parts.doseLine(doseLineId)
   const inForce = await parts.doseLinesOf(agent)
-  if (inForce.some((one) => one.id === line.id)) return
+  const isByWeight = !isForBath(line)
+  if (!isByWeight && inForce.some((one) => one.id === line.id)) return
   const detail =
     line.agent === agent
-      ? orderProblemWords.lineNotInForce
+      ? isByWeight
+        ? orderProblemWords.lineByWeight
+        : orderProblemWords.lineNotInForce
       : orderProblemWords.lineOfOther({ line: agentNames[line.agent], product: agentNames[agent] })
   throw new Problem('dose-line-not-usable', {
     detail,
@@ -220,7 +225,7 @@ export async function readSituation(
     named: fields.animalIds,
   })
   if (!situation) throw noWaterProblem()
-  const lines = product === null ? [] : await parts.doseLinesOf(product.agent)
+  const lines = product === null ? [] : (await parts.doseLinesOf(product.agent)).filter(isForBath)
   const changed = await readChangedFigures(options.db ?? parts.dataSource, fields, {
     product,
     lines,

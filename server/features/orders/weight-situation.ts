@@ -3,6 +3,7 @@ import type { Product } from '../../../shared/contracts/formulary.contract.ts'
 import { judgeWeight } from '../../../shared/domain/animals/judge-weight.ts'
 import { unknown } from '../../../shared/domain/cautions/fact.ts'
 import { isGivenByWeight } from '../../../shared/domain/formulary/agent.ts'
+import { routeOfUse } from '../../../shared/domain/formulary/dose-line.ts'
 import { judgeWeightOrder } from '../../../shared/domain/orders/judge-weight-order.ts'
 import type { WeightOrderJudgement } from '../../../shared/domain/orders/judge-weight-order.ts'
 import type { AnimalToTreat, WeightOrderDraft } from '../../../shared/domain/orders/weight-order-draft.ts'
@@ -10,7 +11,6 @@ import type { BathFacts } from '../../../shared/domain/orders/order-facts.ts'
 import type { RouteByWeight } from '../../../shared/domain/orders/order-route.ts'
 import type { Quantity } from '../../../shared/domain/units/quantity.ts'
 import { quantityOf } from '../../../shared/domain/units/quantity-of.ts'
-import { unitOf } from '../../../shared/domain/units/unit-of.ts'
 import type { UnitCode } from '../../../shared/domain/units/unit-table.ts'
 import { agentNames } from '../../../shared/messages/formulary.ts'
 import { figureChanged } from '../../../shared/messages/orders.ts'
@@ -155,7 +155,7 @@ export async function readWeightSituation(
   // no record of a dose by weight is kept yet, so what else the animal had is not known
   const base: BathFacts = { ...found.base, history: { ...found.base.history, animalUses: unknown() } }
   const lines = product === null ? [] : await parts.doseLinesOf(product.agent)
-  const byWeight = lines.filter(({ unit }) => unitOf(unit as UnitCode).dimension === 'bodyDose')
+  const byWeight = lines.filter(({ use }) => routeOfUse(use) === fields.route)
   const settings = await parts.settingsAt(at)
   const judgement =
     product && changed.length === 0

@@ -1,3 +1,4 @@
+import { routeOfUse } from './dose-line.ts'
 import type { RouteByWeight } from '../orders/order-route.ts'
 
 /** Agents that are given into the water. */
@@ -43,8 +44,14 @@ export type AgentCode = (typeof agentCodes)[number]
  *
  * @source common practice, no source; that a line must be there: project default (P)
  */
-export function isGivenInWater(agent: AgentCode, linesInForce: readonly { agent: AgentCode }[]): boolean {
-  return immersionAgents.some((one) => one === agent) || linesInForce.some((line) => line.agent === agent)
+export function isGivenInWater(
+  agent: AgentCode,
+  linesInForce: readonly { agent: AgentCode; use: string }[],
+): boolean {
+  return (
+    immersionAgents.some((one) => one === agent) ||
+    linesInForce.some((line) => line.agent === agent && routeOfUse(line.use) === 'immersion')
+  )
 }
 
 /** Agents of the water that are given into the mouth as well; into a needle none of them goes. */

@@ -2,7 +2,7 @@ import { useState } from 'react'
 import { BadgeCheck } from 'lucide-react'
 import type { DoseLine } from '../../../shared/contracts/formulary.contract.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { agentNames, basisNames, waterKinds } from '../../../shared/messages/formulary.ts'
+import { agentNames, basisNames } from '../../../shared/messages/formulary.ts'
 import { formularyWords as words, markNames } from '../../../shared/messages/formulary-screens.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { useMay } from '../../lib/may.ts'
@@ -11,7 +11,7 @@ import { Button } from '../../ui/button.tsx'
 import { Facts } from '../../ui/facts.tsx'
 import { ReasonDialog } from '../../ui/reason-dialog.tsx'
 import { useToast } from '../../ui/toast-context.ts'
-import { rangeOfLine, useOfLine } from './dose-line-text.ts'
+import { rangeOfLine, useOfLine, waterOfLine } from './dose-line-text.ts'
 import { LineState } from './line-state.tsx'
 import { useConfirmLine } from './mutations.ts'
 
@@ -32,7 +32,7 @@ export function DoseLineFacts({ line, zone }: { line: DoseLine; zone: string }) 
           </b>,
         ],
         [words.basis, basisNames[line.basis]],
-        [words.water, waterKinds[line.water]],
+        [words.water, waterOfLine(line)],
         [
           words.contact,
           line.longestContactMinutes === null

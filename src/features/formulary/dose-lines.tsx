@@ -1,14 +1,14 @@
 import { Link } from 'react-router-dom'
 import type { DoseLine } from '../../../shared/contracts/formulary.contract.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
-import { agentNames, basisNames, waterKinds } from '../../../shared/messages/formulary.ts'
+import { agentNames, basisNames } from '../../../shared/messages/formulary.ts'
 import { formularyWords as words } from '../../../shared/messages/formulary-screens.ts'
 import { sayInstant } from '../../../shared/messages/say-date.ts'
 import { paths } from '../../lib/paths.ts'
 import { DataTable } from '../../ui/data-table.tsx'
 import type { TableColumn } from '../../ui/data-table-columns.ts'
 import { ListEmpty } from '../../ui/list-states.tsx'
-import { rangeOfLine, useOfLine } from './dose-line-text.ts'
+import { rangeOfLine, useOfLine, waterOfLine } from './dose-line-text.ts'
 import { LineState } from './line-state.tsx'
 
 const pageSize = 50
@@ -39,7 +39,7 @@ export function DoseLines({ lines, zone }: { lines: readonly DoseLine[]; zone: s
         </>
       ),
     },
-    { id: 'water', heading: words.water, cell: (line) => waterKinds[line.water] },
+    { id: 'water', heading: words.water, cell: (line) => waterOfLine(line) },
     {
       id: 'contact',
       heading: words.contact,

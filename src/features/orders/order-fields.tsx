@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query'
 import type { Product } from '../../../shared/contracts/formulary.contract.ts'
 import type { OrderPreview } from '../../../shared/contracts/orders.contract.ts'
 import { isGivenInWater } from '../../../shared/domain/formulary/agent.ts'
+import { routeOfUse } from '../../../shared/domain/formulary/dose-line.ts'
 import { formatDose } from '../../../shared/domain/quantities/format-dose.ts'
 import { agentNames, basisNames, waterKinds } from '../../../shared/messages/formulary.ts'
 import { lotStateNames } from '../../../shared/messages/formulary-screens.ts'
@@ -50,7 +51,9 @@ export function OrderFields({
   const products = data?.products ?? []
   const product = products.find((one) => one.id === values.productId)
   const linesInForce = (data?.lines ?? []).filter((line) => line.state !== 'proposed')
-  const lines = linesInForce.filter((line) => line.agent === product?.agent)
+  const lines = linesInForce.filter(
+    (line) => line.agent === product?.agent && routeOfUse(line.use) === 'immersion',
+  )
   const line = lines.find((one) => one.id === values.doseLineId)
   return (
     <>
